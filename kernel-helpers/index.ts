@@ -1,0 +1,1 @@
+export { ModelError } from "../src/numeric/index.js";

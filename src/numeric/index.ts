@@ -1,0 +1,2 @@
+export { ModelError } from "./model-error.js";
+export type { Warning } from "./warning.js";

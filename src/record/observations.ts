@@ -1,0 +1,51 @@
+import type { Finding } from "./finding.js";
+
+/** How far apart recorded periods lie: `{ every: 12, of: "hour" }` is one step of twelve hours. */
+export interface StepLength {
+  readonly every: number;
+  readonly of: string;
+}
+
+/** One state of the record: the name rules use, the column it was read from, and its unit ("" = none). */
+export interface ObservedState {
+  readonly name: string;
+  readonly column: string;
+  readonly unit: string;
+}
+
+/** One series of a record: one flask, one loan, one item. All arrays have one entry a kept row. */
+export interface ObservedGroup {
+  /** "" when the record has a single group. */
+  readonly name: string;
+  /** Whole steps since the first row of the group, increasing; 0 at its first row. A gap stays a gap. */
+  readonly index: Int32Array;
+  /** The period column as it was read, in `period.unit`. */
+  readonly time: Float64Array;
+  /** By state name: the values, finite. */
+  readonly values: Readonly<Record<string, Float64Array>>;
+  /** By input name, aligned with `index`. */
+  readonly inputs: Readonly<Record<string, Float64Array>>;
+  /** 1-based row numbers in the record, header not counted. */
+  readonly rows: Int32Array;
+}
+
+/** A record made ready for rules: groups of values by whole steps, with what was found on the way. */
+export interface Observations {
+  readonly kind: "observations";
+  readonly groups: readonly ObservedGroup[];
+  readonly states: readonly ObservedState[];
+  readonly inputs: readonly string[];
+  /** The period column, its unit, and the length of one step in that unit. */
+  readonly period: { readonly column: string; readonly unit: string; readonly step: StepLength };
+  readonly measured: "level" | "flow";
+  /** Order of events inside a period, as the analyst stated it; "" when not stated. */
+  readonly order: string;
+  readonly findings: readonly Finding[];
+  readonly counts: {
+    readonly read: number;
+    readonly used: number;
+    readonly flagged: number;
+    readonly corrected: number;
+    readonly refused: number;
+  };
+}

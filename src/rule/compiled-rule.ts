@@ -1,0 +1,40 @@
+/**
+ * A rule as functions over typed arrays. Order everywhere: states, constants and inputs as in the Rule.
+ *
+ * `inputs` holds one column an input, indexed by absolute period; `from` is the absolute period of the
+ * initial state, so `t` in the rule's text is `from` in the first step. A value that leaves the finite range is
+ * written as it comes (NaN or infinite) and the rest of the path follows from it: callers look.
+ */
+export interface CompiledRule {
+  /** One period. Reads state [states], constants [constants]; writes next [states] (may be the same array). */
+  readonly step: (
+    state: Float64Array,
+    constants: Float64Array,
+    inputs: readonly Float64Array[],
+    t: number,
+    next: Float64Array,
+  ) => void;
+  /** A whole path. values [periods + 1, states], the initial state in row 0. */
+  readonly path: (
+    initial: Float64Array,
+    constants: Float64Array,
+    inputs: readonly Float64Array[],
+    from: number,
+    periods: number,
+    values: Float64Array,
+  ) => void;
+  /**
+   * A whole path with exact sensitivities in the same pass.
+   * values [periods + 1, states]; sensitivities [periods + 1, states, constants + states]: d state / d constant
+   * for every constant in order, then d state / d initial state for every state in order.
+   */
+  readonly pathWithSensitivities: (
+    initial: Float64Array,
+    constants: Float64Array,
+    inputs: readonly Float64Array[],
+    from: number,
+    periods: number,
+    values: Float64Array,
+    sensitivities: Float64Array,
+  ) => void;
+}
