@@ -1,0 +1,8 @@
+/** Refuses the network reads that danfojs-node offers: a record is a file that can be named and checksummed. */
+
+Object.defineProperty(exports, "__esModule", { value: true });
+exports.default = async function refuse(address) {
+  throw new Error(
+    `"${address}" was not read: records are not fetched from the network. Save the file and read it by its path.`,
+  );
+};

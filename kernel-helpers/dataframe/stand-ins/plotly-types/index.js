@@ -1,0 +1,2 @@
+/** Only the declarations of this package are used: danfojs-node loads it in a browser alone. */
+

@@ -1,1 +1,12 @@
-export {};
+declare namespace request {
+  interface RequiredUriUrl {
+    url: string;
+  }
+  interface CoreOptions {
+    method?: string;
+    headers?: Record<string, string>;
+  }
+}
+/** Always throws: records are not fetched from the network. */
+declare function request(asked: string | request.RequiredUriUrl): never;
+export default request;
