@@ -1,3 +1,4 @@
+import { predictedReduction } from "./linear-model.js";
 import type { LinearisedSystem } from "./linearised-system.js";
 import { rotateRowIn } from "./rotate-row-in.js";
 import type { SquaresWorkspace } from "./squares-workspace.js";
@@ -41,13 +42,8 @@ export function triangleOfFree(
   triangle: Float64Array,
   projected: Float64Array,
 ): number {
-  const { held, free, freeScale, scale, row, step, size } = workspace;
-  let count = 0;
-  for (let j = 0; j < size; j++) {
-    if (held[j] === 1) continue;
-    free[count] = j;
-    freeScale[count++] = scale[j]!;
-  }
+  const { held, free, row, step, size } = workspace;
+  const count = listFree(workspace);
   workspace.triangle.fill(0);
   workspace.projected.fill(0);
   for (let i = 0; i < size; i++) {
@@ -55,6 +51,16 @@ export function triangleOfFree(
     for (let j = i; j < size; j++) if (held[j] === 1) right += triangle[i * size + j]! * step[j]!;
     for (let k = 0; k < count; k++) row[k] = free[k]! >= i ? triangle[i * size + free[k]!]! : 0;
     rotateRowIn(workspace.triangle, workspace.projected, row, right, 0, count, size);
+  }
+  return count;
+}
+
+function listFree(workspace: SquaresWorkspace): number {
+  let count = 0;
+  for (let j = 0; j < workspace.size; j++) {
+    if (workspace.held[j] === 1) continue;
+    workspace.free[count] = j;
+    workspace.freeScale[count++] = workspace.scale[j]!;
   }
   return count;
 }
@@ -76,7 +82,7 @@ export function boundedStep(
   radius: number,
   guess: number,
 ): number {
-  const { held, free, freeStep, step, size } = workspace;
+  const { held, free, freeStep, step } = workspace;
   const { triangle, projected } = system;
   let damping = guess;
   let moving = count;
@@ -86,33 +92,17 @@ export function boundedStep(
     crossed = false;
     for (let k = 0; k < moving; k++) {
       const j = free[k]!;
-      const end = clamp(constants[j]! + freeStep[k]!, bounds.lower[j]!, bounds.upper[j]!);
+      const end = within(constants[j]! + freeStep[k]!, bounds, j);
       crossed ||= end !== constants[j]! + freeStep[k]!;
       step[j] = end - constants[j]!;
       if (end !== constants[j]! + freeStep[k]!) held[j] = 1;
     }
     if (crossed) moving = triangleOfFree(workspace, triangle, projected);
   }
-  if (!(predictedReduction(triangle, projected, step, size) > 0)) {
+  if (!(predictedReduction(triangle, projected, step) > 0)) {
     gradientStep(workspace, constants, bounds, radius);
   }
   return damping;
-}
-
-/** ||z||^2 - ||z + R d||^2: by how much the sum of squares should fall. */
-export function predictedReduction(
-  triangle: Float64Array,
-  projected: Float64Array,
-  step: Float64Array,
-  size: number,
-): number {
-  let sum = 0;
-  for (let i = 0; i < size; i++) {
-    let moved = 0;
-    for (let j = i; j < size; j++) moved += triangle[i * size + j]! * step[j]!;
-    sum -= moved * (2 * projected[i]! + moved);
-  }
-  return sum;
 }
 
 function gradientStep(
@@ -127,10 +117,11 @@ function gradientStep(
   const reach = radius / Math.sqrt(length);
   for (let j = 0; j < size; j++) {
     const end = constants[j]! - (reach * gradient[j]!) / scale[j]! ** 2;
-    step[j] = clamp(end, bounds.lower[j]!, bounds.upper[j]!) - constants[j]!;
+    step[j] = within(end, bounds, j) - constants[j]!;
   }
 }
 
-function clamp(value: number, lower: number, upper: number): number {
-  return value < lower ? lower : value > upper ? upper : value;
+/** The value, or the bound of constant j that it lies beyond. */
+export function within(value: number, bounds: Bounds, j: number): number {
+  return Math.min(Math.max(value, bounds.lower[j]!), bounds.upper[j]!);
 }

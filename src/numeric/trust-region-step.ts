@@ -41,25 +41,20 @@ function dampedIntoRadius(
   undampedLength: number,
 ): number {
   const { triangle, freeScale, freeStep, damped } = workspace;
-  let lowest = Number.isFinite(undampedLength)
-    ? newtonCorrection(workspace, triangle, size, undampedLength, radius)
-    : 0;
-  if (!Number.isFinite(lowest)) lowest = 0;
-  let highest = scaledGradientLength(workspace, size) / radius;
-  if (highest === 0) highest = Number.MIN_VALUE / Math.min(radius, slack);
-  let damping = Math.min(Math.max(guess, lowest), highest);
-  if (damping === 0) damping = scaledGradientLength(workspace, size) / (undampedLength + radius) || highest;
+  const slope = scaledGradientLength(workspace, size);
+  const corrected = newtonCorrection(workspace, triangle, size, undampedLength, radius);
+  let lowest = Number.isFinite(corrected) ? corrected : 0;
+  let highest = slope / radius || Number.MIN_VALUE / Math.min(radius, slack);
+  let damping = Math.min(Math.max(guess, lowest), highest) || slope / (undampedLength + radius) || highest;
   for (let round = 0; round < 12; round++) {
-    if (damping === 0) damping = Math.max(Number.MIN_VALUE, 0.001 * highest);
     dampedStep(workspace, size, damping);
     const length = scaledLength(freeScale, freeStep, size);
     const excess = length - radius;
     if (Math.abs(excess) <= slack * radius) break;
     if (excess > 0) lowest = Math.max(lowest, damping);
     else highest = Math.min(highest, damping);
-    const correction = newtonCorrection(workspace, damped, size, length, radius);
-    damping = Math.max(lowest, damping + correction);
-    if (damping > highest) damping = highest;
+    damping += newtonCorrection(workspace, damped, size, length, radius);
+    damping = Math.min(Math.max(damping, lowest), highest);
   }
   return damping;
 }
