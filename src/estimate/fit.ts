@@ -1,0 +1,68 @@
+import type { Warning } from "../numeric/index.js";
+import type { Observations } from "../record/index.js";
+import type { Rule } from "../rule/index.js";
+import type { FitOptions } from "./fit-options.js";
+import { fitGroup, type GroupFit } from "./group-fit.js";
+import { matchStates } from "./match-states.js";
+import { refuseMissingErrors } from "./refusals.js";
+
+/** A rule with its constants estimated from a record, each group on its own. */
+export interface Fit {
+  readonly kind: "fit";
+  readonly rule: Rule;
+  /** The record, its states named as the rule names them. */
+  readonly observations: Observations;
+  readonly options: FitOptions;
+  readonly groups: readonly GroupFit[];
+  readonly warnings: readonly Warning[];
+  /** The conventions behind the numbers, as printed with every table of the fit. */
+  readonly conventions: readonly string[];
+}
+
+/**
+ * Estimates the constants of a rule from a record by least squares.
+ *
+ * `errors: "observation"` minimises sum (y_t - x_t)^2 over the whole trajectory x of the rule, its initial
+ * state among the unknowns; `errors: "process"` minimises sum (y_{t+k} - f^k(y_t))^2 over recorded pairs.
+ * With `spread: "proportional"` the differences are of logarithms.
+ *
+ * @param rule - from `recurrence(...)`; unit of a state = unit of its recorded values.
+ * @param observations - per group at least as many values (pairs) as unknowns + 3; gaps stay gaps.
+ * @returns estimates with standard errors (sigma^2 = RSS/(n - p)), profile and Wald intervals, residuals, stop
+ *   reason and warnings, a group at a time.
+ * @throws {ModelError} `errors-not-stated` | `states-not-recorded` | `too-few-observations` | `no-change` |
+ *   `no-logarithm` | `no-finite-start` | `unknown-name` | `start-outside-bounds` | `input-not-recorded`.
+ * @see Bates, D. M. and Watts, D. G. (1988), Nonlinear Regression Analysis and Its Applications, chapters 2 and 6.
+ * @example
+ * const crowding = recurrence("ΔN = r*N*(1 - N/K)");
+ * const counts = observations({ hour: [0, 1, 2, 3, 4, 5, 6], N: [10, 18, 31, 50, 69, 85, 93] }, { period: "hour" });
+ * fit(crowding, counts, { errors: "observation" }).groups[0].stop.kind; // "converged"
+ */
+export function fit(rule: Rule, observations: Observations, options: FitOptions): Fit {
+  if (options?.errors !== "process" && options?.errors !== "observation") throw refuseMissingErrors();
+  const matched = matchStates(rule, observations);
+  const groups = matched.groups.map((group) => fitGroup(rule, group, options));
+  return Object.freeze({
+    kind: "fit",
+    rule,
+    observations: matched,
+    options: Object.freeze({ ...options }),
+    groups: Object.freeze(groups),
+    warnings: Object.freeze([...rule.findings]),
+    conventions: Object.freeze(conventionsOf(options)),
+  });
+}
+
+function conventionsOf(options: FitOptions): string[] {
+  const cut =
+    options.cut === "chi-square" ? "profile cut chi-square(1), sigma^2 = RSS/n" : "profile cut F(1, n - p)";
+  return [
+    options.errors === "observation"
+      ? "Error in the observation: whole trajectory fitted, initial state estimated unless given."
+      : "Error in the process: each step fitted from the recorded value before it.",
+    options.spread === "proportional"
+      ? "Spread proportional to the level: normal errors on the log scale."
+      : "Spread constant at every level: normal errors.",
+    `Standard errors by sigma^2 = RSS/(n - p); ${cut}; AICc by RSS/n on the fitting scale, counting sigma.`,
+  ];
+}

@@ -1,0 +1,1 @@
+export { type Comparison, type ComparisonRow, compare } from "./compare.js";

@@ -1,0 +1,25 @@
+import { ModelError } from "../numeric/index.js";
+
+export function refuseOneFit(given: number): ModelError {
+  return new ModelError(
+    "too-few-fits",
+    `A comparison needs at least two fits; ${given} given. Pass them as a list: compare([first, second]).`,
+    { given },
+  );
+}
+
+export function refuseUnlikeRecords(first: string, second: string): ModelError {
+  return new ModelError(
+    "unlike-records",
+    `"${first}" and "${second}" were fitted to different records. Fit every rival to the same observations.`,
+    { first, second },
+  );
+}
+
+export function refuseUnlikeErrors(): ModelError {
+  return new ModelError(
+    "unlike-errors",
+    "Fits that put the error in the process and in the observation explain different numbers (steps and values), so " +
+      "their likelihoods cannot be set side by side. Fit every rival with the same { errors }.",
+  );
+}
