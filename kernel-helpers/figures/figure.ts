@@ -1,0 +1,67 @@
+import { type Bundle, showing } from "../tables/index.js";
+import { figureBundle } from "./figure-bundle.js";
+import type { Layer } from "./layer.js";
+import { emptyFigure } from "./refusals.js";
+
+/** An axis: what it measures and in what unit. */
+export interface Axis {
+  readonly title: string;
+  /** "" or absent = none. */
+  readonly unit?: string;
+  /** Default "linear"; "category" for names, "date" for calendar dates as ISO text. */
+  readonly scale?: "linear" | "log" | "category" | "date";
+  /** Ends of the axis, in its unit; default: what the layers need. */
+  readonly ends?: readonly [number, number];
+}
+
+/** One set of axes with what is drawn on it, in drawing order. */
+export interface Panel {
+  /** "" for the only panel of a figure. */
+  readonly title: string;
+  readonly x: Axis;
+  readonly y: Axis;
+  readonly layers: readonly Layer[];
+}
+
+/** A figure as data: what it says, not how it looks. */
+export interface Figure {
+  readonly kind: "figure";
+  readonly title: string;
+  readonly panels: readonly Panel[];
+  /** One or two sentences that say in words what the figure shows; "" when the layers' own account must do. */
+  readonly summary: string;
+  readonly notes: readonly string[];
+}
+
+/** What `figure` takes: one panel's axes and layers, or several panels. */
+export interface FigureOptions {
+  readonly title: string;
+  readonly x?: Axis;
+  readonly y?: Axis;
+  readonly layers?: readonly Layer[];
+  readonly panels?: readonly Panel[];
+  readonly summary?: string;
+  readonly notes?: readonly string[];
+}
+
+/**
+ * Makes a figure that shows itself: a live plot where scripts run, a picture where they do not, and always a
+ * text with the numbers behind it.
+ *
+ * @throws {ModelError} `empty-figure` when there are no axes, or no layer in a panel.
+ * @example figure({ title: "Level", x: { title: "Week" }, y: { title: "Stock", unit: "coils" },
+ *   layers: [{ mark: "points", name: "counted", x: [0, 1], y: [90, 83] }] });
+ */
+export function figure(options: FigureOptions): Figure {
+  const { title, x, y, layers } = options;
+  const panels = options.panels ?? (x && y && layers ? [{ title: "", x, y, layers }] : []);
+  if (panels.length === 0 || panels.some((panel) => panel.layers.length === 0)) throw emptyFigure(title);
+  const made: Figure = {
+    kind: "figure",
+    title,
+    panels: Object.freeze([...panels]),
+    summary: options.summary ?? "",
+    notes: Object.freeze([...(options.notes ?? [])]),
+  };
+  return showing(made, (): Promise<Bundle> => figureBundle(made));
+}

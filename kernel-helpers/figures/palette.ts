@@ -1,0 +1,31 @@
+/** How one series is told from another: colour, dash and shape together, never colour alone. */
+export interface SeriesStyle {
+  readonly colour: string;
+  readonly dash: string;
+  readonly symbol: string;
+}
+
+// Neighbours differ in lightness as well as in hue, so they part in greyscale and for colour-blind readers;
+// a test measures both.
+const styles: readonly SeriesStyle[] = [
+  { colour: "#123c5a", dash: "solid", symbol: "circle" },
+  { colour: "#c2541a", dash: "9px,4px", symbol: "diamond" },
+  { colour: "#2b86b5", dash: "2px,3px", symbol: "square" },
+  { colour: "#6f1b4a", dash: "12px,3px,2px,3px", symbol: "triangle-up" },
+  { colour: "#94801b", dash: "16px,5px", symbol: "cross" },
+  { colour: "#4f5d64", dash: "5px,3px,2px,3px,2px,3px", symbol: "triangle-down" },
+];
+
+/** The style of a series by its number; after six the shapes go round again. */
+export function seriesStyle(number: number): SeriesStyle {
+  return styles[number % styles.length] as SeriesStyle;
+}
+
+/** How many styles differ. */
+export const styleCount: number = styles.length;
+
+/** A colour of the palette made see-through, for the inside of a band. */
+export function tint(colour: string, share: number): string {
+  const part = (at: number): number => Number.parseInt(colour.slice(at, at + 2), 16);
+  return `rgba(${part(1)},${part(3)},${part(5)},${share})`;
+}

@@ -1,0 +1,216 @@
+import { look, typeface } from "../tables/index.js";
+import type { Axis, Figure, Panel } from "./figure.js";
+import type { ArrowLayer, Layer, ThresholdLayer, VerticalLayer } from "./layer.js";
+import { seriesStyle } from "./palette.js";
+import { type PanelPlace, panelPlaces } from "./panel-places.js";
+import { axisTitle, plotText } from "./plot-text.js";
+import { axisName, type PlotTrace } from "./plot-traces.js";
+
+/** Layout of the plotting library, as data; `height` in pixels. */
+export type PlotLayout = Readonly<Record<string, unknown>> & { readonly height: number };
+
+/**
+ * Places panels, axes, marks, legend and, for a picture, the title, for a width in pixels. The live plot carries
+ * its title in the page instead, where it can wrap.
+ */
+export function plotLayout(
+  figure: Figure,
+  data: readonly PlotTrace[],
+  width: number,
+  titled: boolean,
+): PlotLayout {
+  const places = panelPlaces(
+    figure.panels.length,
+    width,
+    titled ? titleHeight(figure.title, width) : 0,
+    data,
+  );
+  const axes = Object.fromEntries(
+    figure.panels.flatMap((panel, at) => panelAxes(panel, at, places.panels[at] as PanelPlace)),
+  );
+  const marks = figure.panels.map((panel, at) => panelMarks(panel, at));
+  const headings = figure.panels.flatMap((panel, at) =>
+    panelHeading(panel, at, places.panels[at] as PanelPlace),
+  );
+  return {
+    width,
+    height: places.height,
+    margin: places.margin,
+    paper_bgcolor: look.paper,
+    plot_bgcolor: look.paper,
+    font: { family: typeface, size: 13, color: look.ink },
+    hoverlabel: { font: { family: typeface, size: 13 } },
+    showlegend: data.filter((trace) => trace["showlegend"]).length > 1,
+    legend: {
+      orientation: "h",
+      x: 0,
+      xanchor: "left",
+      y: 1,
+      yanchor: "bottom",
+      yref: "paper",
+      ...places.legend,
+    },
+    shapes: marks.flatMap((mark) => mark.shapes),
+    annotations: [...marks.flatMap((mark) => mark.annotations), ...headings],
+    bargap: 0.35,
+    ...(titled ? { title: pictureTitle(figure.title, width) } : {}),
+    ...axes,
+  };
+}
+
+function titleColumns(width: number): number {
+  return Math.floor(width / 9.5);
+}
+
+function titleHeight(title: string, width: number): number {
+  return plotText(title, titleColumns(width), 3).split("<br>").length * 21 + 6;
+}
+
+function pictureTitle(title: string, width: number): object {
+  const text = `<b>${plotText(title, titleColumns(width), 3)}</b>`;
+  return {
+    text,
+    font: { size: 16 },
+    x: 0,
+    xref: "container",
+    xanchor: "left",
+    y: 1,
+    yref: "container",
+    yanchor: "top",
+    pad: { l: 8, t: 8 },
+  };
+}
+
+function panelAxes(panel: Panel, at: number, place: PanelPlace): [string, object][] {
+  const x = axisName("x", at);
+  const y = axisName("y", at);
+  const long = (name: string): string => name.replace(/^[xy]/, (letter) => `${letter}axis`);
+  return [
+    [long(x), { ...axisLook(panel.x, place.columns), domain: place.x, anchor: y }],
+    [long(y), { ...axisLook(panel.y, place.rows), domain: place.y, anchor: x }],
+  ];
+}
+
+function axisLook(axis: Axis, columns: number): object {
+  const type = axis.scale === undefined ? "linear" : axis.scale;
+  const ends = type === "log" ? axis.ends?.map(Math.log10) : axis.ends;
+  return {
+    title: { text: plotText(axisTitle(axis), columns), standoff: 8 },
+    type,
+    ...(ends ? { range: ends } : {}),
+    ...(type === "category" ? { autorange: "reversed" } : {}),
+    automargin: true,
+    showline: true,
+    linecolor: look.quiet,
+    linewidth: 1.5,
+    ticks: "outside",
+    tickcolor: look.quiet,
+    ticklen: 5,
+    gridcolor: "#e3e8e6",
+    zeroline: false,
+    nticks: columns < 30 ? 5 : 8,
+    separatethousands: true,
+    exponentformat: "power",
+  };
+}
+
+interface Marks {
+  readonly shapes: readonly object[];
+  readonly annotations: readonly object[];
+}
+
+function panelMarks(panel: Panel, at: number): Marks {
+  let upright = 0;
+  const marks = panel.layers.map((layer, turn): Marks => {
+    const { colour } = seriesStyle(layer.style ?? turn);
+    if (layer.mark === "threshold") return threshold(layer, at, colour);
+    if (layer.mark === "vertical") return vertical(layer, at, colour, upright++);
+    if (layer.mark === "arrow") return { shapes: [], annotations: [arrow(layer, at, colour)] };
+    return { shapes: [], annotations: [] };
+  });
+  return {
+    shapes: marks.flatMap((mark) => mark.shapes),
+    annotations: marks.flatMap((mark) => mark.annotations),
+  };
+}
+
+function threshold(layer: ThresholdLayer, at: number, colour: string): Marks {
+  const xref = `${axisName("x", at)} domain`;
+  const yref = axisName("y", at);
+  const line = { color: colour, width: 1.6, dash: "10px,4px" };
+  return {
+    shapes: [{ type: "line", xref, yref, x0: 0, x1: 1, y0: layer.y, y1: layer.y, line }],
+    annotations:
+      layer.inLegend === false
+        ? []
+        : [label(layer, { xref, yref, x: 1, y: layer.y, xanchor: "right", yanchor: "bottom" })],
+  };
+}
+
+/** Labels of several marks stand at different heights, so that near ones do not cover each other. */
+function vertical(layer: VerticalLayer, at: number, colour: string, turn: number): Marks {
+  const xref = axisName("x", at);
+  const yref = `${axisName("y", at)} domain`;
+  const line = { color: colour, width: 1.4, dash: "4px,4px" };
+  const y = 1 - 0.075 * (turn % 4);
+  return {
+    shapes: [{ type: "line", xref, yref, x0: layer.x, x1: layer.x, y0: 0, y1: 1, line }],
+    annotations:
+      layer.inLegend === false
+        ? []
+        : [label(layer, { xref, yref, x: layer.x, y, xanchor: "left", yanchor: "top" })],
+  };
+}
+
+function label(layer: Layer, where: object): object {
+  return {
+    ...where,
+    text: plotText(layer.name, 34, 2),
+    showarrow: false,
+    font: { size: 12, color: look.ink },
+    bgcolor: "rgba(255,254,251,0.82)",
+    borderpad: 1,
+    align: "left",
+  };
+}
+
+function arrow(layer: ArrowLayer, at: number, colour: string): object {
+  const [ax, ay] = { left: [34, 0], right: [-34, 0], up: [0, 34], down: [0, -34] }[layer.towards] as [
+    number,
+    number,
+  ];
+  return {
+    xref: axisName("x", at),
+    yref: axisName("y", at),
+    x: layer.x,
+    y: layer.y,
+    ax,
+    ay,
+    showarrow: true,
+    arrowhead: 2,
+    arrowsize: 1.3,
+    arrowwidth: 2.2,
+    arrowcolor: colour,
+    text: plotText(layer.name, 26, 2),
+    font: { size: 12, color: look.ink },
+  };
+}
+
+function panelHeading(panel: Panel, at: number, place: PanelPlace): object[] {
+  if (panel.title === "") return [];
+  return [
+    {
+      text: `<b>${plotText(panel.title, place.columns, 2)}</b>`,
+      xref: `${axisName("x", at)} domain`,
+      yref: `${axisName("y", at)} domain`,
+      x: 0,
+      y: 1,
+      xanchor: "left",
+      yanchor: "bottom",
+      yshift: 5,
+      showarrow: false,
+      align: "left",
+      font: { size: 13, color: look.ink },
+    },
+  ];
+}

@@ -1,0 +1,32 @@
+import { escapeHtml, oneLine } from "../tables/index.js";
+
+/**
+ * Text for a plot's labels, which read a little HTML: shown as it is, broken into lines at words.
+ *
+ * @param columns - letters a line; a longer word is cut.
+ * @param lines - lines at most; what is left is replaced by an ellipsis.
+ */
+export function plotText(text: string, columns: number, lines: number = 2): string {
+  return brokenLines(oneLine(text), columns, lines).map(escapeHtml).join("<br>");
+}
+
+function brokenLines(text: string, columns: number, lines: number): string[] {
+  const broken: string[] = [];
+  let line = "";
+  for (const word of text.split(" ")) {
+    const piece = [...word].length > columns ? `${[...word].slice(0, columns - 1).join("")}…` : word;
+    if (line !== "" && line.length + 1 + piece.length > columns) {
+      broken.push(line);
+      line = piece;
+    } else {
+      line = line === "" ? piece : `${line} ${piece}`;
+    }
+  }
+  broken.push(line);
+  return broken.length <= lines ? broken : [...broken.slice(0, lines - 1), `${broken[lines - 1]}…`];
+}
+
+/** "Density (10^4 cells/mL)": what an axis measures, with its unit. */
+export function axisTitle(axis: { readonly title: string; readonly unit?: string }): string {
+  return axis.unit ? `${axis.title} (${axis.unit})` : axis.title;
+}

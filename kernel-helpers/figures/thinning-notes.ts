@@ -1,0 +1,18 @@
+import { numberFormat, written } from "../tables/index.js";
+import type { Figure } from "./figure.js";
+import { thinned } from "./thinned.js";
+
+/** A sentence for every layer of which not all points are drawn. */
+export function thinningNotes(figure: Figure): string[] {
+  const count = (n: number): string => written(String(n), numberFormat());
+  return figure.panels
+    .flatMap((panel) => panel.layers)
+    .flatMap((layer) => {
+      if (layer.mark !== "points" && layer.mark !== "line") return [];
+      const few = thinned(layer.x, layer.y);
+      if (few === undefined) return [];
+      return [
+        `${layer.name}: ${count(few.kept.length)} of ${count(few.of)} points are drawn, every extreme among them.`,
+      ];
+    });
+}

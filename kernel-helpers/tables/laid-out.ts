@@ -1,0 +1,113 @@
+import { absent, cellText } from "./cell-text.js";
+import { written } from "./number-format.js";
+import type { Column, Footnote, Table } from "./table.js";
+
+/** One cell ready to be drawn: its text, the letter of its footnote, and whether it is a number. */
+export interface Cell {
+  readonly text: string;
+  readonly mark: string;
+  readonly numeric: boolean;
+}
+
+/** A table with every text decided: HTML and terminal differ only in how they draw this. */
+export interface LaidOut {
+  readonly headings: readonly Cell[];
+  readonly rows: readonly (readonly Cell[])[];
+  readonly totals: readonly (readonly Cell[])[];
+  /** Rows left out after this many shown ones; undefined when all are shown. */
+  readonly cutAfter: number | undefined;
+  readonly notes: readonly { readonly mark: string; readonly text: string }[];
+}
+
+/** Decides what a table shows: rows within its limit, texts, footnote letters, and the notes it owes. */
+export function laidOut(table: Table): LaidOut {
+  const { columns, rows, totals, limit, format } = table;
+  const cut = rows.length > limit;
+  const head = cut ? Math.ceil(limit * 0.75) : rows.length;
+  const tail = cut ? limit - head : 0;
+  const places = [...Array(head).keys(), ...Array.from({ length: tail }, (_, i) => rows.length - tail + i)];
+  const marks = footnoteMarks(table.notes);
+  const texts = [...places.map((place) => rows[place] ?? {}), ...totals].map((row) =>
+    columns.map((column) => cellText(column, row, format)),
+  );
+  alignFractions(texts, columns, format.decimal);
+  const cells = texts.map((line, at) =>
+    line.map((text, j) => ({
+      text,
+      mark: at < places.length ? marks.at(columns[j]?.key, places[at]) : "",
+      numeric: columns[j]?.kind !== "text",
+    })),
+  );
+  const notes = [...marks.notes];
+  if (texts.some((line) => line.includes(absent))) notes.push({ mark: absent, text: "no value" });
+  if (cut) notes.push({ mark: "", text: cutNote(head, tail, rows.length, table) });
+  return {
+    headings: columns.map((column) => ({
+      text: heading(column, table),
+      mark: marks.at(column.key, undefined),
+      numeric: column.kind !== "text",
+    })),
+    rows: cells.slice(0, places.length),
+    totals: cells.slice(places.length),
+    cutAfter: cut ? head : undefined,
+    notes,
+  };
+}
+
+/** "Density (10^4 cells/mL)": the label with its unit; a money column without one takes the currency set. */
+export function heading(column: Column, table: Table): string {
+  const unit = column.unit || (column.kind === "money" ? table.format.currency : "");
+  return unit === "" ? column.label : `${column.label} (${unit})`;
+}
+
+function cutNote(head: number, tail: number, all: number, { format }: Table): string {
+  const count = (n: number): string => written(String(n), format);
+  const last = tail > 0 ? ` and ${count(all - tail + 1)} to ${count(all)}` : "";
+  return `Rows 1 to ${count(head)}${last} of ${count(all)} are shown.`;
+}
+
+function footnoteMarks(notes: Table["notes"]): {
+  at: (column: string | undefined, row: number | undefined) => string;
+  notes: { mark: string; text: string }[];
+} {
+  const placed = notes.filter(
+    (note): note is Footnote => typeof note !== "string" && note.column !== undefined,
+  );
+  const letter = (note: Footnote): string => String.fromCharCode(97 + (placed.indexOf(note) % 26));
+  return {
+    at: (column, row) =>
+      placed
+        .filter((note) => note.column === column && note.row === row)
+        .map(letter)
+        .join(","),
+    notes: notes.map((note) => {
+      if (typeof note === "string") return { mark: "", text: note };
+      return { mark: placed.includes(note) ? letter(note) : "", text: note.text };
+    }),
+  };
+}
+
+/** Pads numbers on the right, so that decimal signs stand under each other in a right-aligned column. */
+function alignFractions(texts: string[][], columns: readonly Column[], decimal: string): void {
+  columns.forEach((column, j) => {
+    if (column.kind === "text") return;
+    const widths = texts.map((line) => fractionWidth(line[j] ?? "", decimal));
+    const widest = Math.max(0, ...widths.filter((width) => width !== undefined));
+    texts.forEach((line, i) => {
+      const width = widths[i];
+      if (width !== undefined && width < widest) line[j] = (line[j] ?? "") + padding(width, widest);
+    });
+  });
+}
+
+// A figure space is as wide as a digit, a punctuation space as the decimal sign.
+function padding(width: number, widest: number): string {
+  return width === 0 ? `\u2008${"\u2007".repeat(widest - 1)}` : "\u2007".repeat(widest - width);
+}
+
+/** Characters from the decimal sign on; undefined for what is no plain number. */
+function fractionWidth(text: string, decimal: string): number | undefined {
+  if (!/^[-<>]?\d[\d.,'\u00a0\u2009\u202f ]*%?$/.test(text)) return undefined;
+  const at = text.lastIndexOf(decimal);
+  return at < 0 ? 0 : text.replace("%", "").length - at;
+}

@@ -1,0 +1,28 @@
+import { ModelError } from "../../src/numeric/index.js";
+
+/** Columns of a table must be told apart by their keys. */
+export function columnRepeated(key: string, title: string): ModelError {
+  return new ModelError(
+    "column-repeated",
+    `Two columns of the table "${title}" have the key "${key}". Give each column a key of its own.`,
+    { key, title },
+  );
+}
+
+/** A table without columns has nothing to show. */
+export function noColumns(title: string): ModelError {
+  return new ModelError(
+    "no-columns",
+    `The table "${title}" has no columns. Name at least one: { key: "period", label: "Period", kind: "integer" }.`,
+    { title },
+  );
+}
+
+/** A column may lean only on a key that rows can hold. */
+export function unknownColumnKind(kind: string, key: string, known: readonly string[]): ModelError {
+  return new ModelError(
+    "unknown-column-kind",
+    `Column "${key}" has the kind "${kind}", which no table knows. Known kinds: ${known.join(", ")}.`,
+    { kind, key, known },
+  );
+}

@@ -1,0 +1,76 @@
+import { escapeHtml } from "./escape-html.js";
+import { type Cell, laidOut } from "./laid-out.js";
+import { look, typeface } from "./look.js";
+import { tabSeparated } from "./tab-separated.js";
+import type { Table } from "./table.js";
+
+/** Beyond this many rows the page would carry the record twice; then only a command gives the whole of it. */
+const copied = 2000;
+
+/** A table as HTML that scrolls inside its own box and needs no script but for its copy button. */
+export function tableHtml(table: Table): string {
+  const laid = laidOut(table);
+  const head = `<tr>${laid.headings.map((cell) => cellHtml(cell, "th")).join("")}</tr>`;
+  const rows = laid.rows.map((row) => `<tr>${row.map((cell) => cellHtml(cell, "td")).join("")}</tr>`);
+  const span = `<tr><td class="pw-gap" colspan="${table.columns.length}">`;
+  if (laid.cutAfter !== undefined) rows.splice(laid.cutAfter, 0, `${span}…</td></tr>`);
+  if (rows.length === 0) rows.push(`${span}no rows</td></tr>`);
+  const foot = laid.totals
+    .map((row) => `<tr>${row.map((cell) => cellHtml(cell, "td")).join("")}</tr>`)
+    .join("");
+  const notes = laid.notes
+    .map(({ mark, text }) => `<p dir="auto">${mark === "" ? "" : `<b>${mark}</b> `}${escapeHtml(text)}</p>`)
+    .join("");
+  return [
+    `<div class="pw-table">${tableStyle}<div class="pw-scroll"><table>`,
+    `<caption dir="auto">${escapeHtml(table.title)}</caption>`,
+    `<thead>${head}</thead><tbody>${rows.join("")}</tbody>${foot === "" ? "" : `<tfoot>${foot}</tfoot>`}`,
+    `</table></div>${notes === "" ? "" : `<div class="pw-notes">${notes}</div>`}${copyButton(table)}</div>`,
+  ].join("");
+}
+
+function cellHtml({ text, mark, numeric }: Cell, tag: "th" | "td"): string {
+  const shown = numeric ? numberHtml(text) : escapeHtml(text);
+  const note = mark === "" ? "" : `<sup>${mark}</sup>`;
+  const scope = tag === "th" ? ' scope="col"' : "";
+  return `<${tag}${scope} class="${numeric ? "pw-n" : "pw-t"}" dir="auto">${shown}${note}</${tag}>`;
+}
+
+/** A true minus sign, and a power of ten written as one. */
+function numberHtml(text: string): string {
+  if (!/^[-<>]?[\d∞]/.test(text)) return escapeHtml(text);
+  const power = /^(.*\d)e(-?\d+)$/.exec(text);
+  const minus = (part: string): string => escapeHtml(part).replace(/^-/, "−");
+  return power ? `${minus(power[1] ?? "")}×10<sup>${minus(power[2] ?? "")}</sup>` : minus(text);
+}
+
+function copyButton(table: Table): string {
+  if (table.rows.length > copied) return "";
+  const copy =
+    "var b=this,t=document.createElement('textarea');t.value=b.getAttribute('data-copy');" +
+    "t.style.position='fixed';t.style.opacity=0;document.body.appendChild(t);t.select();" +
+    "b.textContent=document.execCommand('copy')?'Copied':'Not copied';t.remove()";
+  const text = escapeHtml(tabSeparated(table)).replace(/\n/g, "&#10;").replace(/\t/g, "&#9;");
+  return `<button type="button" class="pw-copy" data-copy="${text}" onclick="${copy}">Copy</button>`;
+}
+
+// Each selector names the box twice, to win over what a notebook's own page says about tables.
+const box = ".pw-table.pw-table";
+const tableStyle: string = `<style>
+${box}{margin:.8em 0 1em;color:${look.ink};font-family:${typeface};font-size:14px;line-height:1.4;max-width:100%}
+${box} .pw-scroll{overflow-x:auto;max-width:100%}
+${box} table{border-collapse:collapse;border:0;border-top:3px solid ${look.accent};background:${look.paper};margin:0;font-size:14px;width:auto;table-layout:auto}
+${box} caption{caption-side:top;text-align:left;font-weight:600;font-size:15px;color:${look.ink};padding:0 0 .4em;overflow-wrap:anywhere}
+${box} th,${box} td{border:0;border-bottom:1px solid ${look.line};padding:.32em .8em;vertical-align:baseline;max-width:28em;overflow-wrap:anywhere;background:none;color:${look.ink};white-space:normal}
+${box} thead th{font-weight:600;color:${look.quiet};background:${look.shade};vertical-align:bottom;min-width:3.5em}
+${box} .pw-n{text-align:right;font-variant-numeric:tabular-nums;white-space:nowrap}
+${box} thead .pw-n{white-space:normal}
+${box} .pw-t{text-align:left}
+${box} tbody tr,${box} tfoot tr{background:none}
+${box} tfoot td{font-weight:600;border-top:2px solid ${look.quiet}}
+${box} .pw-gap{text-align:center;color:${look.quiet}}
+${box} .pw-notes{color:${look.quiet};font-size:13px;margin:.4em 0 0}
+${box} .pw-notes p{margin:.15em 0;overflow-wrap:anywhere}
+${box} .pw-copy{font:inherit;font-size:12px;color:${look.accent};background:${look.paper};border:1px solid ${look.line};border-radius:3px;padding:.1em .7em;margin:.4em 0 0;cursor:pointer}
+@media print{${box} .pw-copy{display:none}${box} tr{break-inside:avoid}${box} .pw-scroll{overflow:visible}}
+</style>`;

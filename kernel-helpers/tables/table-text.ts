@@ -1,0 +1,46 @@
+import { type Cell, laidOut } from "./laid-out.js";
+import { displayWidth, oneLine, shortened } from "./plain-text.js";
+import type { Table } from "./table.js";
+
+const widestCell = 44;
+
+/** A table as text that lines up in a terminal. */
+export function tableText(table: Table): string {
+  const laid = laidOut(table);
+  const lines = [laid.headings, ...laid.rows, ...laid.totals].map((line) => line.map(cellLine));
+  const widths = laid.headings.map((_, j) => Math.max(...lines.map((line) => displayWidth(line[j] ?? ""))));
+  const drawn = lines.map((line) =>
+    line
+      .map((text, j) => padded(text, widths[j] ?? 0, laid.headings[j]))
+      .join("  ")
+      .trimEnd(),
+  );
+  const rule = widths.map((width) => "─".repeat(width)).join("  ");
+  const [top = "", ...body] = drawn;
+  const rows = body.slice(0, laid.rows.length);
+  if (laid.cutAfter !== undefined) rows.splice(laid.cutAfter, 0, "…");
+  if (rows.length === 0) rows.push("(no rows)");
+  const totals = body.slice(laid.rows.length);
+  const notes = laid.notes.map(({ mark, text }) => (mark === "" ? "" : `${mark}: `) + oneLine(text));
+  return [
+    oneLine(table.title),
+    "",
+    top,
+    rule,
+    ...rows,
+    ...(totals.length > 0 ? [rule, ...totals] : []),
+    ...(notes.length > 0 ? ["", ...notes] : []),
+  ].join("\n");
+}
+
+function cellLine({ text, mark, numeric }: Cell): string {
+  const line = numeric ? text.replace(/[\u2007\u2008]/g, " ") : oneLine(text);
+  const note = mark === "" ? "" : ` ${mark})`;
+  // The padding that lines up decimal signs must survive, so numbers are not trimmed.
+  return shortened(/^[-<>]?\d/.test(line) && numeric ? line : oneLine(line), widestCell) + note;
+}
+
+function padded(text: string, width: number, column: Cell | undefined): string {
+  const space = " ".repeat(Math.max(0, width - displayWidth(text)));
+  return column?.numeric ? space + text : text + space;
+}

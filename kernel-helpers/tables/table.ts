@@ -1,0 +1,98 @@
+import { type NumberFormat, numberFormat } from "./number-format.js";
+import { columnRepeated, noColumns, unknownColumnKind } from "./refusals.js";
+import { showing } from "./show-itself.js";
+import { tableHtml } from "./table-html.js";
+import { tableText } from "./table-text.js";
+
+const kinds = ["text", "integer", "number", "estimate", "money", "percent", "probability"] as const;
+
+/** How a column's values are written; see `Column`. */
+export type ColumnKind = (typeof kinds)[number];
+
+/**
+ * One column. Kinds, and how each writes a number:
+ * `integer` whole; `number` to `digits` significant digits (default 4); `estimate` to the decimal at which the
+ * standard error under `pairedWith` has its second digit (the standard error's own column may leave it out);
+ * `money` to the minor unit, whole minor units when the value is a bigint; `percent` a share, times 100, to
+ * `digits` decimals (default 1); `probability` to the first digit of its Monte-Carlo error under `pairedWith`,
+ * else to `digits` decimals (default 3). A text in any of them ("not determined") is shown as that text.
+ */
+export interface Column {
+  /** Where rows hold the value. */
+  readonly key: string;
+  readonly label: string;
+  /** Written behind the label in brackets; "" or absent = none. */
+  readonly unit?: string;
+  readonly kind: ColumnKind;
+  readonly digits?: number;
+  /** Key of the standard error (estimate) or Monte-Carlo error (probability) that says how many digits count. */
+  readonly pairedWith?: string;
+}
+
+/** What stands below a table: a sentence, with a mark at a heading or a cell when `column` (and `row`) name one. */
+export interface Footnote {
+  readonly text: string;
+  readonly column?: string;
+  /** 0-based; without it the mark stands at the column's heading. */
+  readonly row?: number;
+}
+
+/** A table as data: what it says, not how it looks. */
+export interface Table {
+  readonly kind: "table";
+  readonly title: string;
+  readonly columns: readonly Column[];
+  readonly rows: readonly Readonly<Record<string, unknown>>[];
+  /** Rows set apart at the foot: sums, means. */
+  readonly totals: readonly Readonly<Record<string, unknown>>[];
+  readonly notes: readonly (string | Footnote)[];
+  /** At most so many rows are shown; the count of the others is said. */
+  readonly limit: number;
+  readonly format: NumberFormat;
+}
+
+/** What `table` takes. */
+export interface TableOptions {
+  readonly title: string;
+  readonly columns: readonly Column[];
+  readonly rows: readonly Readonly<Record<string, unknown>>[];
+  readonly totals?: readonly Readonly<Record<string, unknown>>[];
+  readonly notes?: readonly (string | Footnote)[];
+  /** Default 40. */
+  readonly limit?: number;
+  /** Default: the format in force (`numberFormat`). */
+  readonly format?: Partial<NumberFormat>;
+}
+
+/**
+ * Makes a table that shows itself: HTML for a notebook or page, lined-up text for a terminal.
+ *
+ * Every text is escaped. An absent value is an en dash, and a note says so.
+ *
+ * @throws {ModelError} `no-columns` | `column-repeated` | `unknown-column-kind`.
+ * @example table({ title: "Levels", columns: [{ key: "n", label: "Week", kind: "integer" }], rows: [{ n: 1 }] });
+ */
+export function table(options: TableOptions): Table {
+  checkColumns(options.columns, options.title);
+  const made: Table = {
+    kind: "table",
+    title: options.title,
+    columns: Object.freeze([...options.columns]),
+    rows: Object.freeze([...options.rows]),
+    totals: Object.freeze([...(options.totals ?? [])]),
+    notes: Object.freeze([...(options.notes ?? [])]),
+    limit: Math.max(1, options.limit ?? 40),
+    format: Object.freeze({ ...numberFormat(), ...options.format }),
+  };
+  return showing(made, () => ({ "text/html": tableHtml(made), "text/plain": tableText(made) }));
+}
+
+function checkColumns(columns: readonly Column[], title: string): void {
+  if (columns.length === 0) throw noColumns(title);
+  const seen = new Set<string>();
+  for (const { key, kind } of columns) {
+    if (seen.has(key)) throw columnRepeated(key, title);
+    if (!kinds.includes(kind)) throw unknownColumnKind(kind, key, kinds);
+    seen.add(key);
+  }
+}
