@@ -1,5 +1,12 @@
 import type { Warning } from "../numeric/index.js";
 
+/** Random change added in every period: on the value itself, or as a factor exp(sd z - sd^2/2) of mean 1. */
+export interface ProcessNoise {
+  readonly kind: "additive" | "lognormal";
+  /** Standard deviation a period: a number, or the name of a constant of the rule. */
+  readonly sd: number | string;
+}
+
 /** A recurrence: text that was read, checked, and made ready to be run, differentiated and printed. */
 export interface Rule {
   readonly kind: "rule";
@@ -8,6 +15,11 @@ export interface Rule {
   /** How the first state is stated: `X[t+1] = ...` or `ΔX = ...`. */
   readonly form: "next" | "change";
   readonly states: readonly string[];
+  /**
+   * Past values that the rule reads, for rules with lags; empty otherwise. The state vector of the compiled
+   * rule is the states in order and then these.
+   */
+  readonly memory: readonly { readonly state: string; readonly lag: number }[];
   /** Named values inside the period, in event order. */
   readonly quantities: readonly string[];
   readonly inputs: readonly string[];
@@ -21,5 +33,12 @@ export interface Rule {
   readonly guesses: Readonly<Record<string, number>>;
   /** Constants held at a value in every fit. */
   readonly fixed: Readonly<Record<string, number>>;
+  /**
+   * By state, where stated: the value at the first period; a list, oldest first, where the rule reads past
+   * values; or "estimated".
+   */
+  readonly initial: Readonly<Record<string, number | readonly number[] | "estimated">>;
+  /** By state, where stated. */
+  readonly noise: Readonly<Record<string, ProcessNoise>>;
   readonly findings: readonly Warning[];
 }

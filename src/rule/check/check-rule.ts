@@ -1,0 +1,56 @@
+import type { Warning } from "../../numeric/index.js";
+import { editDistance } from "../nearest-names.js";
+import { refuse } from "../refusals.js";
+import type { Statement } from "../syntax/expression.js";
+import { checkRightSide } from "./check-expression.js";
+import type { CheckedRule, Declared } from "./checked-rule.js";
+import { type Names, namesOf } from "./names.js";
+
+/** Names that differ by one letter are more often a slip than two constants; short symbols are exempt. */
+function lookAlikeNames(names: Names): readonly Warning[] {
+  const all = [...names.states, ...names.quantityLines.keys(), ...names.inputs, ...names.constants.keys()];
+  const free = [...names.constants.keys()];
+  if (names.declared !== undefined) return [];
+  return free.flatMap((name) =>
+    all
+      .filter((other) => other !== name && Math.min(name.length, other.length) >= 3)
+      .filter((other) => !free.includes(other) || free.indexOf(other) < free.indexOf(name))
+      .filter((other) => editDistance(name, other) === 1)
+      .map((other) => ({
+        code: "names-look-alike",
+        message: `"${name}" and "${other}" differ by one letter and are read as two names. If one is a slip, correct it; declare { constants: [...] } to have every other name refused.`,
+      })),
+  );
+}
+
+function unused(names: Names): readonly Warning[] {
+  const constants = [...(names.declared ?? [])].filter((name) => !names.constants.has(name));
+  const inputs = [...names.inputs].filter((name) => !names.usedInputs.has(name));
+  return [...constants, ...inputs].map((name) => ({
+    code: "declared-but-unused",
+    message: `"${name}" is declared and stands nowhere in the rule. Take it out, or look for a slip in the text.`,
+  }));
+}
+
+/** Gives every name of a rule its meaning, or refuses with the place of the one that has none. */
+export function checkRule(text: string, statements: readonly Statement[], declared: Declared): CheckedRule {
+  const names = namesOf(text, statements, declared);
+  if (names.states.size === 0) {
+    const wrong = "No line of the rule says how a value changes from one period to the next.";
+    const remedy = "Write one line as N[t+1] = ... or ΔN = ...";
+    throw refuse("no-state", text, statements[0]!, wrong, remedy);
+  }
+  statements.forEach(({ expression }, line) => {
+    checkRightSide(names, expression, line);
+  });
+  return {
+    text,
+    statements,
+    states: [...names.states],
+    quantities: [...names.quantityLines.keys()],
+    inputs: declared.inputs.filter((name) => names.usedInputs.has(name)),
+    constants: [...names.constants.keys()],
+    lags: names.lags,
+    findings: [...lookAlikeNames(names), ...unused(names)],
+  };
+}

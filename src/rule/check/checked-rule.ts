@@ -1,0 +1,22 @@
+import type { Warning } from "../../numeric/index.js";
+import type { Statement } from "../syntax/expression.js";
+
+/** Lines whose every name has a meaning and whose every call has its number of values. */
+export interface CheckedRule {
+  readonly text: string;
+  readonly statements: readonly Statement[];
+  readonly states: readonly string[];
+  readonly quantities: readonly string[];
+  readonly inputs: readonly string[];
+  readonly constants: readonly string[];
+  /** By state: the largest lag read; absent where only the present value is. */
+  readonly lags: ReadonlyMap<string, number>;
+  readonly findings: readonly Warning[];
+}
+
+/** What the analyst declared beside the text. */
+export interface Declared {
+  /** Absent: every free name is a constant. */
+  readonly constants?: readonly string[] | undefined;
+  readonly inputs: readonly string[];
+}

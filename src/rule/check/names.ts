@@ -1,0 +1,69 @@
+import { ruleFunctions } from "../functions.js";
+import { refuse, unknownName } from "../refusals.js";
+import type { Statement } from "../syntax/expression.js";
+import type { Span } from "../syntax/token.js";
+import type { Declared } from "./checked-rule.js";
+
+/** What the names of one rule mean, filled while its lines are read in order. */
+export interface Names {
+  readonly text: string;
+  readonly states: ReadonlySet<string>;
+  readonly inputs: ReadonlySet<string>;
+  /** Declared constants, or undefined when every free name is one. */
+  readonly declared: ReadonlySet<string> | undefined;
+  /** By quantity: the number of the line that sets it. */
+  readonly quantityLines: ReadonlyMap<string, number>;
+  /** In order of first appearance. */
+  readonly constants: Map<string, Span>;
+  readonly usedInputs: Set<string>;
+  /** Largest lag read, by state. */
+  readonly lags: Map<string, number>;
+}
+
+function refuseSecond(text: string, place: Span, name: string): Error {
+  const wrong = `"${name}" is set twice.`;
+  return refuse("set-twice", text, place, wrong, "Keep one of the lines, or give the other another name.");
+}
+
+function refuseSetInput(text: string, place: Span, name: string, kind: string): Error {
+  const wrong = `"${name}" is declared as ${kind}, and a line sets it.`;
+  return refuse(
+    "set-twice",
+    text,
+    place,
+    wrong,
+    `Take it out of ${kind === "an input" ? "inputs" : "constants"}.`,
+  );
+}
+
+/** Sorts the names that lines set into states and quantities. */
+export function namesOf(text: string, statements: readonly Statement[], declared: Declared): Names {
+  const states = new Set<string>();
+  const quantityLines = new Map<string, number>();
+  const inputs = new Set(declared.inputs);
+  statements.forEach(({ kind, name, nameAt }, line) => {
+    if (states.has(name) || quantityLines.has(name)) throw refuseSecond(text, nameAt, name);
+    if (inputs.has(name)) throw refuseSetInput(text, nameAt, name, "an input");
+    if (declared.constants?.includes(name)) throw refuseSetInput(text, nameAt, name, "a constant");
+    if (kind === "quantity") quantityLines.set(name, line);
+    else states.add(name);
+  });
+  return {
+    text,
+    states,
+    inputs,
+    declared: declared.constants && new Set(declared.constants),
+    quantityLines,
+    constants: new Map(),
+    usedInputs: new Set(),
+    lags: new Map(),
+  };
+}
+
+/** The refusal of a name that is none of the known ones. */
+export function refuseUnknown(names: Names, place: Span, name: string): Error {
+  const others = [...names.states, ...names.quantityLines.keys(), ...names.inputs];
+  const constants = [...(names.declared ?? [])];
+  const functions = ruleFunctions.map((one) => one.name);
+  return unknownName(names.text, place, name, { constants, others, functions });
+}

@@ -1,0 +1,41 @@
+import type { CompiledRule } from "../compiled-rule.js";
+import type { Rule } from "../rule.js";
+import { ruleDefinition } from "../rule-definition.js";
+import { generateRule } from "./generate-rule.js";
+import { interpretGraph } from "./interpret-graph.js";
+
+const compiled = new WeakMap<Rule, CompiledRule>();
+
+/** Whether this place allows functions to be made from source; some hosts forbid it. */
+function allowsGeneratedCode(): boolean {
+  try {
+    new Function("");
+    return true;
+  } catch {
+    return false;
+  }
+}
+
+/**
+ * Makes a rule ready to run over typed arrays, once for each rule.
+ *
+ * The functions are generated from the checked expression graph and hold slots only, no name of the text.
+ * Where generated code is forbidden the interpreter serves, with the same numbers.
+ *
+ * @param rule - from `recurrence`; a copy of one (from another thread, or a file) is read again from its text.
+ * @returns step, path and path with exact sensitivities; shapes in `CompiledRule`.
+ * @example const { step } = compileRule(recurrence("N[t+1] = R*N"));
+ */
+export function compileRule(rule: Rule): CompiledRule {
+  let found = compiled.get(rule);
+  if (found === undefined) {
+    found = allowsGeneratedCode() ? generateRule(ruleDefinition(rule).graph) : interpretRule(rule);
+    compiled.set(rule, found);
+  }
+  return found;
+}
+
+/** The same as `compileRule`, by a plain interpreter of the expression graph: the same numbers, many times slower. */
+export function interpretRule(rule: Rule): CompiledRule {
+  return interpretGraph(ruleDefinition(rule).graph);
+}

@@ -1,0 +1,90 @@
+import type { Node } from "../graph/node.js";
+import { operations } from "../graph/operations.js";
+
+/** Source for a set of nodes: what can stand before the loop over periods, and what belongs inside it. */
+export interface EmittedProgram {
+  readonly before: readonly string[];
+  readonly inside: readonly string[];
+  /** The expression that holds a node's value, inside the loop. */
+  readonly read: (node: Node) => string;
+}
+
+/** Deeper expressions are cut into local variables, to spare the compiler's stack. */
+const deepest = 24;
+
+interface Facts {
+  readonly uses: Map<Node, number>;
+  readonly varies: Map<Node, boolean>;
+  readonly ordered: Node[];
+}
+
+/** Counts uses, finds which nodes change from period to period, and orders arguments before what uses them. */
+function survey(roots: readonly Node[]): Facts {
+  const facts: Facts = { uses: new Map(), varies: new Map(), ordered: [] };
+  const visit = (node: Node): void => {
+    facts.uses.set(node, (facts.uses.get(node) ?? 0) + 1);
+    if (facts.varies.has(node)) return;
+    if (node.kind === "inner") for (const part of node.inside) visit(part);
+    const varies =
+      node.kind === "leaf"
+        ? node.role !== "constant"
+        : node.kind === "inner" && node.inside.some((part) => facts.varies.get(part)!);
+    facts.varies.set(node, varies);
+    facts.ordered.push(node);
+  };
+  roots.forEach(visit);
+  return facts;
+}
+
+function numberSource(value: number): string {
+  if (Number.isNaN(value)) return "NaN";
+  if (value < 0 || Object.is(value, -0)) return `(${Object.is(value, -0) ? "-0" : value})`;
+  return String(value);
+}
+
+/** Names come from roles and slots alone, never from the rule's text. */
+function leafSource(node: Extract<Node, { kind: "leaf" }>): string {
+  if (node.role === "state") return `s${node.slot}`;
+  if (node.role === "constant") return `c${node.slot}`;
+  if (node.role === "period") return "t";
+  return node.offset === 0 ? `u${node.slot}[t]` : `u${node.slot}[t + ${node.offset}]`.replace("+ -", "- ");
+}
+
+/** Whether a node gets a variable: it is used twice or nested deep, or leaves the loop. */
+function needsVariable(node: Node, facts: Facts, depth: number): boolean {
+  if (node.kind === "leaf") return node.role === "input";
+  return node.kind === "inner" && (facts.uses.get(node)! > 1 || depth > deepest || !facts.varies.get(node)!);
+}
+
+/**
+ * Writes source for the roots and everything below them. Variables are `v` and the node's id; leaves must be
+ * in scope as s0, c0, u0, t.
+ */
+export function emitProgram(roots: readonly Node[]): EmittedProgram {
+  const facts = survey(roots);
+  const before: string[] = [];
+  const inside: string[] = [];
+  const sources = new Map<Node, string>();
+  const depths = new Map<Node, number>();
+  for (const node of facts.ordered) {
+    if (node.kind === "number") {
+      sources.set(node, numberSource(node.value));
+      continue;
+    }
+    let source = node.kind === "leaf" ? leafSource(node) : innerSource(node, sources);
+    let depth = node.kind === "leaf" ? 0 : 1 + Math.max(...node.inside.map((part) => depths.get(part) ?? 0));
+    if (needsVariable(node, facts, depth)) {
+      (facts.varies.get(node)! ? inside : before).push(`const v${node.id} = ${source};`);
+      source = `v${node.id}`;
+      depth = 0;
+    }
+    sources.set(node, source);
+    depths.set(node, depth);
+  }
+  return { before, inside, read: (node) => sources.get(node)! };
+}
+
+function innerSource(node: Extract<Node, { kind: "inner" }>, sources: ReadonlyMap<Node, string>): string {
+  const [a = "", b = "", c = ""] = node.inside.map((part) => sources.get(part)!);
+  return operations[node.operator].code(a, b, c);
+}

@@ -1,0 +1,63 @@
+import type { CompiledRule } from "../compiled-rule.js";
+import { modulo, roundTo } from "../graph/operations.js";
+import type { RuleGraph } from "../graph/rule-graph.js";
+import { interpretGraph } from "./interpret-graph.js";
+import { pathSource, stepSource } from "./path-source.js";
+import { sensitivitySource } from "./sensitivity-source.js";
+
+/** Wider sensitivity tables would fill the registers' spill space many times over; a plain loop serves them. */
+const widestTable = 400;
+
+/** Functions by their source: rules that read the same share one, and its optimisation. */
+const made = new Map<string, unknown>();
+const mostKept = 500;
+
+/** Makes a function of source that holds only slots, numbers and operations of our own tables. */
+function makeFunction<T>(parameters: string, body: string): T {
+  const source = `"use strict";\nreturn (${parameters}) => {\n${body}\n};`;
+  let found = made.get(source);
+  if (found === undefined) {
+    if (made.size >= mostKept) made.clear();
+    found = new Function("roundTo", "modulo", source)(roundTo, modulo);
+    made.set(source, found);
+  }
+  return found as T; // the parameters and the body are those of the member that T names
+}
+
+/** Puts off the work until the function is first called; later calls go straight to it. */
+function late<T>(make: () => T): () => T {
+  let found: T | undefined;
+  return () => {
+    found ??= make();
+    return found;
+  };
+}
+
+/** The rule as generated functions, each made when first read. */
+export function generateRule(rule: RuleGraph): CompiledRule {
+  const step = late(() =>
+    makeFunction<CompiledRule["step"]>("state, constants, inputs, t, next", stepSource(rule)),
+  );
+  const path = late(() =>
+    makeFunction<CompiledRule["path"]>("initial, constants, inputs, from, periods, values", pathSource(rule)),
+  );
+  const pathWithSensitivities = late(() =>
+    rule.states * (rule.states + rule.constants) > widestTable
+      ? interpretGraph(rule).pathWithSensitivities
+      : makeFunction<CompiledRule["pathWithSensitivities"]>(
+          "initial, constants, inputs, from, periods, values, sensitivities",
+          sensitivitySource(rule),
+        ),
+  );
+  return {
+    get step() {
+      return step();
+    },
+    get path() {
+      return path();
+    },
+    get pathWithSensitivities() {
+      return pathWithSensitivities();
+    },
+  };
+}

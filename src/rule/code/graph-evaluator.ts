@@ -1,0 +1,46 @@
+import type { Node } from "../graph/node.js";
+import { operations } from "../graph/operations.js";
+
+/** Where a step stands: present values, constants, input columns and the period index. */
+export type Place = Readonly<{
+  state: Float64Array;
+  constants: Float64Array;
+  inputs: readonly Float64Array[];
+  t: number;
+}>;
+
+function leafValue(node: Extract<Node, { kind: "leaf" }>, place: Place): number {
+  if (node.role === "state") return place.state[node.slot]!;
+  if (node.role === "constant") return place.constants[node.slot]!;
+  if (node.role === "period") return place.t;
+  return place.inputs[node.slot]![place.t + node.offset] ?? Number.NaN;
+}
+
+/** Gives the value that a node had at the place last worked out. */
+export type ReadNode = (node: Node) => number;
+
+/** Works out nodes one after the other; the same operations in the same order as the generated code. */
+export function graphEvaluator(roots: readonly Node[]): (place: Place) => ReadNode {
+  const ordered: Node[] = [];
+  const position = new Map<Node, number>();
+  const visit = (node: Node): void => {
+    if (position.has(node)) return;
+    if (node.kind === "inner") node.inside.forEach(visit);
+    position.set(node, ordered.length);
+    ordered.push(node);
+  };
+  roots.forEach(visit);
+  const tape = new Float64Array(ordered.length);
+  const read: ReadNode = (node) => tape[position.get(node)!]!;
+  return (place) => {
+    ordered.forEach((node, index) => {
+      if (node.kind === "number") tape[index] = node.value;
+      else if (node.kind === "leaf") tape[index] = leafValue(node, place);
+      else {
+        const [a, b = a!, c = a!] = node.inside;
+        tape[index] = operations[node.operator].value(read(a!), read(b), read(c));
+      }
+    });
+    return read;
+  };
+}

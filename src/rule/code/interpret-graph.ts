@@ -1,0 +1,66 @@
+import type { CompiledRule } from "../compiled-rule.js";
+import type { RuleGraph } from "../graph/rule-graph.js";
+import { stepDerivatives } from "../graph/step-derivatives.js";
+import { graphEvaluator, type ReadNode } from "./graph-evaluator.js";
+
+/** Sensitivities [states, unknowns] after a step, from those before it and the slopes of the step. */
+function nextSensitivities(rule: RuleGraph, read: ReadNode, before: Float64Array, after: Float64Array): void {
+  const { byState, byConstant } = stepDerivatives(rule);
+  const zero = rule.graph.number(0);
+  const unknowns = rule.constants + rule.states;
+  for (let cell = 0; cell < after.length; cell++) {
+    const slot = Math.floor(cell / unknowns);
+    const unknown = cell % unknowns;
+    let sum = 0;
+    byState[slot]!.forEach((slope, k) => {
+      if (slope !== zero) sum += read(slope) * before[k * unknowns + unknown]!;
+    });
+    const own = byConstant[slot]![unknown];
+    after[cell] = own === undefined ? sum : sum + read(own);
+  }
+}
+
+/** The rule as plain loops over its graph, for places that forbid generated code. */
+export function interpretGraph(rule: RuleGraph): CompiledRule {
+  const width = rule.states;
+  const evaluateStep = graphEvaluator(rule.next);
+  const step: CompiledRule["step"] = (state, constants, inputs, t, next) => {
+    const read = evaluateStep({ state, constants, inputs, t });
+    rule.next.forEach((node, slot) => {
+      next[slot] = read(node);
+    });
+  };
+  const path: CompiledRule["path"] = (initial, constants, inputs, from, periods, values) => {
+    const state = initial.slice(0, width);
+    values.set(state);
+    for (let i = 1; i <= periods; i++) {
+      step(state, constants, inputs, from + i - 1, state);
+      values.set(state, i * width);
+    }
+  };
+  return { step, path, pathWithSensitivities: interpretSensitivities(rule) };
+}
+
+function interpretSensitivities(rule: RuleGraph): CompiledRule["pathWithSensitivities"] {
+  const width = rule.states;
+  const table = width * (rule.constants + width);
+  const { byState, byConstant } = stepDerivatives(rule);
+  const evaluateAll = graphEvaluator([...rule.next, ...byState.flat(), ...byConstant.flat()]);
+  return (initial, constants, inputs, from, periods, values, sensitivities) => {
+    const state = initial.slice(0, width);
+    values.set(state);
+    sensitivities.fill(0, 0, table);
+    for (let slot = 0; slot < width; slot++) {
+      sensitivities[slot * (rule.constants + width) + rule.constants + slot] = 1;
+    }
+    for (let i = 1; i <= periods; i++) {
+      const read = evaluateAll({ state, constants, inputs, t: from + i - 1 });
+      const before = sensitivities.subarray((i - 1) * table, i * table);
+      nextSensitivities(rule, read, before, sensitivities.subarray(i * table, (i + 1) * table));
+      rule.next.forEach((node, slot) => {
+        state[slot] = read(node);
+      });
+      values.set(state, i * width);
+    }
+  };
+}

@@ -1,0 +1,56 @@
+/** What a rule may call: how many values it takes and what it gives. */
+export interface RuleFunction {
+  readonly name: string;
+  readonly fewest: number;
+  readonly most: number;
+  /** How it is written, for help. */
+  readonly usage: string;
+  readonly meaning: string;
+}
+
+const entry = (name: string, fewest: number, most: number, usage: string, meaning: string): RuleFunction =>
+  Object.freeze({ name, fewest, most, usage, meaning });
+
+/** Every function of the rule language. A name that is not here is not a function. */
+export const ruleFunctions: readonly RuleFunction[] = Object.freeze([
+  entry("exp", 1, 1, "exp(x)", "e to the power x"),
+  entry("log", 1, 1, "log(x)", "natural logarithm"),
+  entry("log10", 1, 1, "log10(x)", "logarithm to base 10"),
+  entry("sqrt", 1, 1, "sqrt(x)", "square root"),
+  entry("abs", 1, 1, "abs(x)", "size without sign"),
+  entry("sign", 1, 1, "sign(x)", "-1, 0 or 1"),
+  entry("min", 2, 20, "min(a, b, ...)", "smallest of the values"),
+  entry("max", 2, 20, "max(a, b, ...)", "largest of the values"),
+  entry("floor", 1, 1, "floor(x)", "largest whole number not above x"),
+  entry("ceil", 1, 1, "ceil(x)", "smallest whole number not below x"),
+  entry(
+    "round",
+    1,
+    2,
+    "round(x, digits)",
+    "rounded to decimal digits (0 if not given), halves away from zero",
+  ),
+  entry("mod", 2, 2, "mod(x, m)", "remainder of x divided by m, with the sign of m"),
+  entry("sin", 1, 1, "sin(x)", "sine of x in radians"),
+  entry("cos", 1, 1, "cos(x)", "cosine of x in radians"),
+  entry("tan", 1, 1, "tan(x)", "tangent of x in radians"),
+  entry("if", 3, 3, "if(condition, a, b)", "a where the condition holds, otherwise b"),
+  entry("change", 1, 1, "change(X) = ...", "the change of state X from this period to the next"),
+]);
+
+const byName: ReadonlyMap<string, RuleFunction> = new Map(ruleFunctions.map((one) => [one.name, one]));
+
+/** The function of that name, if the rule language has it. */
+export const ruleFunction = (name: string): RuleFunction | undefined => byName.get(name);
+
+/** Words with a meaning of their own: no state, quantity, input or constant may be called so. */
+export const reservedWords: ReadonlySet<string> = new Set([
+  "t",
+  "and",
+  "or",
+  "not",
+  "constructor",
+  "prototype",
+  "__proto__",
+  ...byName.keys(),
+]);

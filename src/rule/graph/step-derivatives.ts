@@ -1,0 +1,30 @@
+import { derivativeBy } from "./differentiate.js";
+import type { Node } from "./node.js";
+import type { RuleGraph } from "./rule-graph.js";
+
+/** Partial derivatives of one step. */
+export interface StepDerivatives {
+  /** [slot][slot]: next value of the first by present value of the second. */
+  readonly byState: readonly (readonly Node[])[];
+  /** [slot][constant] */
+  readonly byConstant: readonly (readonly Node[])[];
+}
+
+const known = new WeakMap<RuleGraph, StepDerivatives>();
+
+/** All partial derivatives of one step of a rule, worked out once. */
+export function stepDerivatives(rule: RuleGraph): StepDerivatives {
+  let found = known.get(rule);
+  if (found === undefined) {
+    const by = (role: "state" | "constant", count: number): readonly (readonly Node[])[] => {
+      const columns = Array.from({ length: count }, (_, slot) => {
+        const derivative = derivativeBy(rule.graph, rule.graph.leaf(role, slot));
+        return rule.next.map(derivative);
+      });
+      return rule.next.map((_, row) => columns.map((column) => column[row]!));
+    };
+    found = { byState: by("state", rule.states), byConstant: by("constant", rule.constants) };
+    known.set(rule, found);
+  }
+  return found;
+}

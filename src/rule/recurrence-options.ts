@@ -1,0 +1,21 @@
+import type { ProcessNoise } from "./rule.js";
+
+/** What can be said of a rule beside its text. */
+export interface RecurrenceOptions {
+  /** The only names that are constants; any other free name is then refused. Default: every free name is one. */
+  readonly constants?: readonly string[];
+  /** Names that are recorded by period: columns of the record. Only they may be read at [t+1]. */
+  readonly inputs?: readonly string[];
+  /** Unit by name. */
+  readonly units?: Readonly<Record<string, string>>;
+  /** Lowest and highest admitted value by state or constant; infinite where open. */
+  readonly bounds?: Readonly<Record<string, readonly [number, number]>>;
+  /** Where a fit starts, by constant. */
+  readonly guesses?: Readonly<Record<string, number>>;
+  /** Constants that no fit changes. */
+  readonly fixed?: Readonly<Record<string, number>>;
+  /** By state: its first value, its first values oldest first where the rule reads past ones, or "estimated". */
+  readonly initial?: Readonly<Record<string, number | readonly number[] | "estimated">>;
+  /** By state: random change added in every period. */
+  readonly noise?: Readonly<Record<string, ProcessNoise>>;
+}

@@ -1,0 +1,82 @@
+import { reservedWords } from "../functions.js";
+import { refuse } from "../refusals.js";
+import type { Statement } from "./expression.js";
+import { parseExpression } from "./parse-expression.js";
+import { parseOffset } from "./parse-offset.js";
+import { joiningStrength } from "./strengths.js";
+import type { Token } from "./token.js";
+import { type TokenReader, tokenReader } from "./token-reader.js";
+
+const forms = "A line sets a next value, N[t+1] = ..., a change, ΔN = ..., or a named quantity, paid = ...";
+
+type Target = Pick<Statement, "kind" | "name" | "nameAt">;
+
+function takeName(reader: TokenReader): Token {
+  const name = reader.take();
+  if (name.kind === "name" && !reservedWords.has(name.text)) return name;
+  const wrong =
+    name.kind === "name"
+      ? `"${name.text}" has a meaning of its own and cannot be set.`
+      : "A line must begin with the name of what it sets.";
+  throw refuse("unreadable-line", reader.text, name, wrong, forms);
+}
+
+function parseTarget(reader: TokenReader): Target {
+  if (reader.accept("Δ")) {
+    const name = takeName(reader);
+    return { kind: "change", name: name.text, nameAt: name };
+  }
+  if (reader.peek().text === "change" && reader.peek(1).text === "(") {
+    reader.take();
+    reader.take();
+    const name = takeName(reader);
+    reader.expect(")", "Write the change of one state, as in change(N) = r*N.");
+    return { kind: "change", name: name.text, nameAt: name };
+  }
+  const name = takeName(reader);
+  const bracket = reader.peek();
+  const { offset, end } = parseOffset(reader, name);
+  if (bracket.text !== "[") return { kind: "quantity", name: name.text, nameAt: name };
+  if (offset === 1) return { kind: "next", name: name.text, nameAt: { start: name.start, end } };
+  const wrong = `A line can set the next value of "${name.text}" only, at [t+1].`;
+  throw refuse("unreadable-line", reader.text, { start: name.start, end }, wrong, forms);
+}
+
+function expectEquals(reader: TokenReader, from: Token): void {
+  if (reader.accept("=")) return;
+  const found = reader.peek();
+  const joins = joiningStrength(found) > 0 || found.kind === "newline" || found.kind === "end";
+  const place = joins ? { start: from.start, end: Math.max(from.end, found.start) } : found;
+  throw refuse("unreadable-line", reader.text, place, "The line does not say what it sets.", forms);
+}
+
+function parseStatement(reader: TokenReader): Statement {
+  const first = reader.peek();
+  const target = parseTarget(reader);
+  expectEquals(reader, first);
+  const expression = parseExpression(reader);
+  const after = reader.peek();
+  if (after.kind !== "newline" && after.kind !== "end") {
+    const remedy =
+      after.text === "="
+        ? "Write == to compare, and begin a new line for another quantity."
+        : after.text === ","
+          ? "Write decimals with a point, as in 0.5."
+          : "Take it away, or open a bracket for it.";
+    throw refuse("stray-sign", reader.text, after, `The sign "${after.text}" joins nothing here.`, remedy);
+  }
+  return { ...target, expression, start: first.start, end: expression.end };
+}
+
+/** Reads a rule's text, already normalised, into its lines. Nothing is known yet of what the names mean. */
+export function parseRule(text: string): readonly Statement[] {
+  const reader = tokenReader(text);
+  const statements: Statement[] = [];
+  for (;;) {
+    while (reader.peek().kind === "newline") reader.take();
+    if (reader.peek().kind === "end") break;
+    statements.push(parseStatement(reader));
+  }
+  if (statements.length > 0) return statements;
+  throw refuse("empty-rule", text, reader.peek(), "The rule has no line.", forms);
+}

@@ -1,0 +1,11 @@
+/** A half-open range of UTF-16 offsets into the rule's text. */
+export interface Span {
+  readonly start: number;
+  readonly end: number;
+}
+
+/** One word, number or sign of a rule's text. `text` is canonical: the look-alike minus reads "-". */
+export interface Token extends Span {
+  readonly kind: "number" | "name" | "sign" | "newline" | "end";
+  readonly text: string;
+}
