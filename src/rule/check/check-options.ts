@@ -30,7 +30,7 @@ interface OptionCheck {
   readonly fits: Fits;
 }
 
-const isNumber = (value: unknown): boolean => typeof value === "number" && Number.isNumber(value);
+const isNumber = (value: unknown): boolean => typeof value === "number" && Number.isFinite(value);
 
 function checks(rule: CheckedRule): readonly OptionCheck[] {
   const { states, constants, quantities, inputs } = rule;
