@@ -1,2 +1,13 @@
+export type { CalendarName } from "./calendar.js";
+export { type Column, type ColumnTable, columnNamed, isEmpty, rowCount, tableOf } from "./column-table.js";
+export type { Decision } from "./decision.js";
 export type { Finding } from "./finding.js";
-export type { Observations, ObservedGroup, ObservedState, StepLength } from "./observations.js";
+export type { CensoringLimits, DuplicateChoice, ObservationOptions } from "./observation-options.js";
+export type {
+  Observations,
+  ObservedGroup,
+  ObservedState,
+  ReplicateSpread,
+  StepLength,
+} from "./observations.js";
+export { observations } from "./observe.js";

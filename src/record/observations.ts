@@ -1,3 +1,4 @@
+import type { Decision } from "./decision.js";
 import type { Finding } from "./finding.js";
 
 /** How far apart recorded periods lie: `{ every: 12, of: "hour" }` is one step of twelve hours. */
@@ -13,13 +14,20 @@ export interface ObservedState {
   readonly unit: string;
 }
 
+/** Technical replicates of one state that were averaged: how many a row, and their standard deviation. */
+export interface ReplicateSpread {
+  readonly count: Int32Array;
+  /** Divided by count - 1; NaN where there is a single one. */
+  readonly deviation: Float64Array;
+}
+
 /** One series of a record: one flask, one loan, one item. All arrays have one entry a kept row. */
 export interface ObservedGroup {
   /** "" when the record has a single group. */
   readonly name: string;
   /** Whole steps since the first row of the group, increasing; 0 at its first row. A gap stays a gap. */
   readonly index: Int32Array;
-  /** The period column as it was read, in `period.unit`. */
+  /** The period column as it was read, in `period.unit`; from the earliest row where it holds dates. */
   readonly time: Float64Array;
   /** By state name: the values, finite. */
   readonly values: Readonly<Record<string, Float64Array>>;
@@ -27,6 +35,14 @@ export interface ObservedGroup {
   readonly inputs: Readonly<Record<string, Float64Array>>;
   /** 1-based row numbers in the record, header not counted. */
   readonly rows: Int32Array;
+  /** The periods as they were written, where they are dates or pairs. */
+  readonly labels?: readonly string[];
+  /** Positive weights; absent when all are 1. */
+  readonly weights?: Float64Array;
+  /** By state name: 0 exact, -1 at or below the value, 1 at or above it; absent when all are exact. */
+  readonly censoring?: Readonly<Record<string, Int8Array>>;
+  /** By state name, where replicates were averaged. */
+  readonly replicates?: Readonly<Record<string, ReplicateSpread>>;
 }
 
 /** A record made ready for rules: groups of values by whole steps, with what was found on the way. */
@@ -36,11 +52,19 @@ export interface Observations {
   readonly states: readonly ObservedState[];
   readonly inputs: readonly string[];
   /** The period column, its unit, and the length of one step in that unit. */
-  readonly period: { readonly column: string; readonly unit: string; readonly step: StepLength };
+  readonly period: {
+    readonly column: string;
+    readonly unit: string;
+    readonly step: StepLength;
+    /** The calendar's name, where one was chosen by name. */
+    readonly calendar?: string;
+  };
   readonly measured: "level" | "flow";
   /** Order of events inside a period, as the analyst stated it; "" when not stated. */
   readonly order: string;
   readonly findings: readonly Finding[];
+  /** Corrections that the analyst chose, in the order in which they were made. */
+  readonly decisions?: readonly Decision[];
   readonly counts: {
     readonly read: number;
     readonly used: number;

@@ -1,0 +1,110 @@
+import { dayLength, type Moment, mondayBefore, mondayOf, monthNumber } from "./calendar-date.js";
+import type { StepLength } from "./observations.js";
+
+/** A way of counting periods: by name, or a number of units of time. */
+export type CalendarName =
+  | "half-hour"
+  | "hour"
+  | "day"
+  | "week"
+  | "iso-week"
+  | "28-day"
+  | "month"
+  | "month-end"
+  | "4-4-5"
+  | "quarter"
+  | "year"
+  | "survey-year";
+
+/** How a calendar numbers its periods, one whole number a period. */
+export interface Calendar {
+  readonly name: CalendarName | undefined;
+  readonly step: StepLength;
+  /** Number of the period that a date lies in; not whole when dates may lie off the step. */
+  readonly ofDate: ((moment: Moment) => number) | undefined;
+  /** Number of the period named by a year and a number within it, or undefined when there is none. */
+  readonly ofYearAndNumber: ((year: number, number: number) => number | undefined) | undefined;
+  /** The numbers a period column may hold, counted in `step.of`. */
+  readonly ofNumber: (value: number) => number;
+}
+
+const unitLengths: Readonly<Record<string, number>> = {
+  second: 1000,
+  minute: 60_000,
+  "half-hour": 1_800_000,
+  hour: 3_600_000,
+  day: dayLength,
+  week: 7 * dayLength,
+};
+const unitMonths: Readonly<Record<string, number>> = { month: 1, quarter: 3, year: 12 };
+
+/** "hours" is "hour"; any other word is kept, for periods such as a transfer or a generation. */
+export function singular(unit: string): string {
+  const one = unit.trim().replace(/s$/, "");
+  return Object.hasOwn(unitLengths, one) || Object.hasOwn(unitMonths, one) ? one : unit.trim();
+}
+
+/** Counts every so many units of time: hours, days, months, or transfers, where the column holds numbers. */
+export function everyUnit(step: StepLength, name?: CalendarName): Calendar {
+  const of = singular(step.of);
+  const [length, months] = [unitLengths[of], unitMonths[of]];
+  return {
+    name,
+    step: { every: step.every, of },
+    ofDate:
+      length !== undefined
+        ? (moment) => moment / (length * step.every)
+        : months !== undefined
+          ? (moment) => Math.floor(monthNumber(moment) / months) / step.every
+          : undefined,
+    ofYearAndNumber: months === undefined ? undefined : numbered(12 / months, step.every),
+    ofNumber: (value) => value / step.every,
+  };
+}
+
+function numbered(inAYear: number, every: number): Calendar["ofYearAndNumber"] {
+  return (year, number) =>
+    number >= 1 && number <= inAYear ? (year * inAYear + number - 1) / every : undefined;
+}
+
+const isoWeeks: Calendar = {
+  name: "iso-week",
+  step: { every: 1, of: "week" },
+  ofDate: (moment) => mondayBefore(moment) / (7 * dayLength),
+  ofYearAndNumber: (year, week) => {
+    const monday = mondayOf(year, week);
+    return monday === undefined ? undefined : monday / (7 * dayLength);
+  },
+  ofNumber: (value) => value,
+};
+
+/** Twelve trading periods a year of four, four and five weeks; a date alone does not say when the year begins. */
+const fourFourFive: Calendar = {
+  name: "4-4-5",
+  step: { every: 1, of: "period" },
+  ofDate: undefined,
+  ofYearAndNumber: numbered(12, 1),
+  ofNumber: (value) => value,
+};
+
+const named: Readonly<Record<CalendarName, Calendar>> = {
+  "half-hour": everyUnit({ every: 1, of: "half-hour" }, "half-hour"),
+  hour: everyUnit({ every: 1, of: "hour" }, "hour"),
+  day: everyUnit({ every: 1, of: "day" }, "day"),
+  week: everyUnit({ every: 1, of: "week" }, "week"),
+  "iso-week": isoWeeks,
+  "28-day": everyUnit({ every: 28, of: "day" }, "28-day"),
+  month: everyUnit({ every: 1, of: "month" }, "month"),
+  "month-end": everyUnit({ every: 1, of: "month" }, "month-end"),
+  "4-4-5": fourFourFive,
+  quarter: everyUnit({ every: 1, of: "quarter" }, "quarter"),
+  year: everyUnit({ every: 1, of: "year" }, "year"),
+  "survey-year": everyUnit({ every: 1, of: "year" }, "survey-year"),
+};
+
+export const calendarNames: readonly string[] = Object.keys(named);
+
+/** The calendar of a name, or undefined when there is none. */
+export function calendarNamed(name: string): Calendar | undefined {
+  return Object.hasOwn(named, name) ? named[name as CalendarName] : undefined;
+}

@@ -1,0 +1,56 @@
+import { nearestNames } from "../numeric/index.js";
+import type { Decision } from "./decision.js";
+import { doubledColumn, missingColumn, unevenColumns } from "./refusals.js";
+
+/** One column of a record: any cells, or numbers with NaN where a cell is empty. */
+export type Column = readonly unknown[] | Float64Array;
+
+/** A record as columns of equal length, names in the record's order; names may repeat or be empty. */
+export interface ColumnTable {
+  readonly names: readonly string[];
+  readonly columns: readonly Column[];
+  /** Corrections that the analyst chose; the columns themselves are always as they were read. */
+  readonly decisions?: readonly Decision[];
+}
+
+/** Number of rows; a table without columns has none. */
+export function rowCount(table: ColumnTable): number {
+  return table.columns[0]?.length ?? 0;
+}
+
+/**
+ * The cells of a named column.
+ *
+ * @throws {ModelError} `missing-column`, naming the nearest columns; `doubled-column` when two have the name.
+ */
+export function columnNamed(table: ColumnTable, name: string, askedFor: string): Column {
+  const at = table.names.indexOf(name);
+  if (at < 0) throw missingColumn(name, askedFor, table.names, nearestNames(name, table.names));
+  if (table.names.indexOf(name, at + 1) >= 0) throw doubledColumn(name, askedFor);
+  return table.columns[at]!;
+}
+
+/**
+ * A table from named columns, such as `{ month: [...], owed: [...] }`.
+ *
+ * @throws {ModelError} `uneven-columns` when their lengths differ.
+ */
+export function tableOf(columns: Readonly<Record<string, ArrayLike<unknown>>>): ColumnTable {
+  const names = Object.keys(columns);
+  const lengths = names.map((name) => columns[name]!.length);
+  if (new Set(lengths).size > 1) throw unevenColumns(names, lengths);
+  return {
+    names,
+    columns: names.map((name) => {
+      const column = columns[name]!;
+      return column instanceof Float64Array ? column : Array.from(column);
+    }),
+  };
+}
+
+/** A cell that holds nothing: null, undefined, not a number, or only spaces. Nothing is not zero. */
+export function isEmpty(cell: unknown): boolean {
+  if (cell === null || cell === undefined) return true;
+  if (typeof cell === "number") return Number.isNaN(cell);
+  return typeof cell === "string" && cell.trim() === "";
+}

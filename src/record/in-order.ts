@@ -1,0 +1,45 @@
+import type { FindingLog } from "./finding-log.js";
+import type { RowGroup } from "./group-rows.js";
+import type { PeriodAxis } from "./period-axis.js";
+import { notIncreasing } from "./refusals.js";
+
+/**
+ * The rows of a series by increasing period; rows of one period keep the record's order.
+ *
+ * @throws {ModelError} `not-increasing` unless the analyst chose to sort.
+ */
+export function inOrder(
+  group: RowGroup,
+  axis: PeriodAxis,
+  disorder: "refuse" | "sort",
+  log: FindingLog,
+): Int32Array {
+  const { position } = axis;
+  const { rows } = group;
+  let outOfOrder = 0;
+  for (let i = 1; i < rows.length; i++) {
+    if (position[rows[i]!]! >= position[rows[i - 1]!]!) continue;
+    if (disorder === "refuse") throw refusal(group, axis, i);
+    outOfOrder++;
+    noteSorted(group, axis, i, log);
+  }
+  if (outOfOrder === 0) return rows;
+  return rows.slice().sort((a, b) => position[a]! - position[b]! || a - b);
+}
+
+function refusal(group: RowGroup, axis: PeriodAxis, i: number): Error {
+  const [before, now] = [group.rows[i - 1]!, group.rows[i]!];
+  return notIncreasing(now + 1, axis.column, group.name, axis.written(before), axis.written(now));
+}
+
+function noteSorted(group: RowGroup, axis: PeriodAxis, i: number, log: FindingLog): void {
+  const [before, now] = [group.rows[i - 1]!, group.rows[i]!];
+  log.note({
+    kind: "disorder",
+    row: now + 1,
+    column: axis.column,
+    value: axis.written(now),
+    message: `Times are not increasing at row ${now + 1}: ${axis.written(now)} follows ${axis.written(before)}.`,
+    done: "sorted by period",
+  });
+}

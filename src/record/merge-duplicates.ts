@@ -1,0 +1,140 @@
+import type { FindingLog } from "./finding-log.js";
+import type { DuplicateChoice } from "./observation-options.js";
+import type { ReplicateSpread } from "./observations.js";
+import type { PeriodAxis } from "./period-axis.js";
+import type { ReadColumns } from "./read-columns.js";
+import { duplicatePeriod } from "./refusals.js";
+
+/** Rows of a series with one row a period, and how a column is carried over to them. */
+export interface MergedRows {
+  /** 0-based: the row that stands for each period. */
+  readonly rows: Int32Array;
+  /** Rows that no longer stand for themselves. */
+  readonly merged: number;
+  readonly carry: (column: Float64Array) => Float64Array;
+  readonly carrySide: (side: Int8Array) => Int8Array;
+  readonly spread: ((column: Float64Array) => ReplicateSpread) | undefined;
+}
+
+/** What to do with the rows of one period: by the choice for duplicates, or as technical replicates. */
+export type Merging = DuplicateChoice | "replicates";
+
+/**
+ * Makes one row a period of rows in order.
+ *
+ * @throws {ModelError} `duplicate-period` unless the analyst chose what to do.
+ */
+export function mergeDuplicates(
+  rows: Int32Array,
+  group: string,
+  columns: ReadColumns,
+  axis: PeriodAxis,
+  merging: Merging,
+  log: FindingLog,
+): MergedRows {
+  const starts = startsOfPeriods(rows, axis.position);
+  if (starts.length === rows.length) return unmerged(rows);
+  const runs = Array.from(starts, (start, i) => rows.subarray(start, starts[i + 1] ?? rows.length));
+  const doubled = runs.filter((run) => run.length > 1);
+  if (merging === "refuse") throw refusal(doubled, group, columns, axis);
+  if (merging !== "replicates") for (const run of doubled) noteDuplicate(run, columns, axis, merging, log);
+  const stands =
+    merging === "last" ? (run: Int32Array) => run[run.length - 1]! : (run: Int32Array) => run[0]!;
+  return {
+    rows: Int32Array.from(runs, stands),
+    merged: rows.length - runs.length,
+    carry: (column) => Float64Array.from(runs, (run) => combine(run, column, merging)),
+    carrySide: (side) => Int8Array.from(runs, (run) => sideOf(run, side, merging)),
+    spread: merging === "replicates" ? (column) => spreadOf(runs, column) : undefined,
+  };
+}
+
+function startsOfPeriods(rows: Int32Array, position: Float64Array): Int32Array {
+  const starts = new Int32Array(rows.length);
+  let count = 0;
+  for (let i = 0; i < rows.length; i++) {
+    // Positions are in steps: closer than a millionth of a step is the same period.
+    if (i === 0 || position[rows[i]!]! - position[rows[i - 1]!]! > 1e-6) starts[count++] = i;
+  }
+  return starts.subarray(0, count);
+}
+
+function unmerged(rows: Int32Array): MergedRows {
+  const carry = (column: Float64Array): Float64Array => Float64Array.from(rows, (row) => column[row]!);
+  const carrySide = (side: Int8Array): Int8Array => Int8Array.from(rows, (row) => side[row]!);
+  return { rows, merged: 0, carry, carrySide, spread: undefined };
+}
+
+function combine(run: Int32Array, column: Float64Array, merging: Merging): number {
+  if (merging === "first") return column[run[0]!]!;
+  if (merging === "last") return column[run[run.length - 1]!]!;
+  let sum = 0;
+  for (const row of run) sum += column[row]!;
+  return merging === "sum" ? sum : sum / run.length;
+}
+
+/** A mean of a limit and values lies on the limit's side of the mean with the limit put in. */
+function sideOf(run: Int32Array, side: Int8Array, merging: Merging): number {
+  if (merging === "first") return side[run[0]!]!;
+  if (merging === "last") return side[run[run.length - 1]!]!;
+  return Math.sign(run.reduce((sum, row) => sum + side[row]!, 0));
+}
+
+function spreadOf(runs: readonly Int32Array[], column: Float64Array): ReplicateSpread {
+  const count = Int32Array.from(runs, (run) => run.length);
+  const deviation = Float64Array.from(runs, (run) => {
+    const mean = combine(run, column, "average");
+    const squares = run.reduce((sum, row) => sum + (column[row]! - mean) ** 2, 0);
+    return run.length > 1 ? Math.sqrt(squares / (run.length - 1)) : Number.NaN;
+  });
+  return { count, deviation };
+}
+
+function valuesOf(run: Int32Array, columns: ReadColumns): string[] {
+  return Array.from(run, (row) => columns.values.map((values) => values[row]!).join(" / "));
+}
+
+function refusal(
+  doubled: readonly Int32Array[],
+  group: string,
+  columns: ReadColumns,
+  axis: PeriodAxis,
+): Error {
+  const run = doubled[0]!;
+  const facts = {
+    rows: Array.from(run, (row) => row + 1),
+    column: axis.column,
+    group,
+    period: axis.written(run[0]!),
+    values: valuesOf(run, columns),
+  };
+  return duplicatePeriod(facts, doubled.length - 1);
+}
+
+const doneFor = {
+  average: "averaged",
+  sum: "added up",
+  first: "the first kept",
+  last: "the last kept",
+  refuse: "",
+};
+
+function noteDuplicate(
+  run: Int32Array,
+  columns: ReadColumns,
+  axis: PeriodAxis,
+  merging: DuplicateChoice,
+  log: FindingLog,
+): void {
+  const rows = Array.from(run, (row) => row + 1).join(" and ");
+  const values = valuesOf(run, columns);
+  const alike = new Set(values).size === 1 ? "the same value" : "different values";
+  log.note({
+    kind: "duplicate-period",
+    row: run[1]! + 1,
+    column: axis.column,
+    value: values.join(", "),
+    message: `${axis.column} ${axis.written(run[0]!)} appears ${run.length} times, at rows ${rows}, with ${alike} (${values.join(", ")}).`,
+    done: doneFor[merging],
+  });
+}

@@ -1,0 +1,49 @@
+import type { CalendarName } from "./calendar.js";
+import type { StepLength } from "./observations.js";
+
+/** What to do where a series has two rows of one period; none is dropped unless the analyst says so. */
+export type DuplicateChoice = "refuse" | "average" | "sum" | "first" | "last";
+
+/** Limits of what could be read: a number beyond which values are censored, or the name of a flag column. */
+export interface CensoringLimits {
+  readonly below?: number | string;
+  readonly above?: number | string;
+}
+
+/** How to read a record as observations. Column names are those of the record. */
+export interface ObservationOptions {
+  /** The period column; or a year column and one that numbers periods within it: `["year", "week"]`. */
+  readonly period: string | readonly [string, string];
+  /** Length of one step, or a calendar; required, because none is assumed. */
+  readonly step?: StepLength | CalendarName;
+  /** The one value column. Give this or `values`. */
+  readonly value?: string;
+  /** State name of the rules -> column. */
+  readonly values?: Readonly<Record<string, string>>;
+  /** Unit of the values, or one a state; default "" (none). */
+  readonly unit?: string | Readonly<Record<string, string>>;
+  /** Columns that tell series apart: flasks, loans, items. */
+  readonly by?: string | readonly string[];
+  /** Only rows whose cells equal these: `{ kind: "sample" }`. */
+  readonly where?: Readonly<Record<string, unknown>>;
+  /** Column that tells technical replicates apart inside a series; their mean is one observation. */
+  readonly replicates?: string;
+  /** Column of weights, positive; default all 1. */
+  readonly weight?: string;
+  /** `"signs"` reads cells such as "<0.05"; or limits as numbers or flag columns. */
+  readonly censored?: "signs" | CensoringLimits;
+  /** A level at an instant, or a flow over the period that ends at the row; default "level". */
+  readonly measured?: "level" | "flow";
+  /** Order of events inside a period, in words; printed with every rule. */
+  readonly order?: string;
+  /** Columns that drive the rule: names, or input name -> column. */
+  readonly inputs?: readonly string[] | Readonly<Record<string, string>>;
+  /** Default "refuse". */
+  readonly duplicates?: DuplicateChoice;
+  /** Rows out of order: "refuse" (default), or "sort" by period. */
+  readonly disorder?: "refuse" | "sort";
+  /** Rows between steps: "refuse" (default) when more than a tenth of a step off, or "nearest". */
+  readonly offStep?: "refuse" | "nearest";
+  /** Sums that must foot, such as "closing = opening + interest - paid" or "opening = closing[t-1]". */
+  readonly identities?: readonly string[];
+}
