@@ -21,6 +21,9 @@ function panelNumbers(panel: Panel, title: string): Table | undefined {
     title: panel.title === "" ? `Numbers behind: ${title}` : panel.title,
     columns: [place, ...drawn.flatMap(layerColumns)],
     rows: mergedRows(drawn),
+    notes: drawn.some((layer) => every(layer) > 1)
+      ? ["Of lines and bands, places at even steps are listed."]
+      : [],
     limit: 60,
   });
 }
@@ -44,7 +47,8 @@ function mergedRows(drawn: readonly Drawn[]): Row[] {
     const repeats = new Map<unknown, number>();
     const lying = layer.mark === "bars" && layer.lying;
     const places = lying ? layer.y : layer.x;
-    for (let i = 0; i < places.length; i++) {
+    const step = every(layer);
+    for (let i = 0; i < places.length; i += step) {
       const place = places[i];
       const turn = repeats.get(place) ?? 0;
       repeats.set(place, turn + 1);
@@ -63,4 +67,11 @@ function valuesOf(layer: Drawn, at: number, i: number): Row {
   if (layer.mark === "band") return { [`lower${at}`]: layer.lower[i], [`upper${at}`]: layer.upper[i] };
   const values = layer.mark === "bars" && layer.lying ? layer.x : layer.y;
   return { [`value${at}`]: values[i] };
+}
+
+/** Lines and bands are drawn finely; of one with many places every so manieth is listed. */
+function every(layer: Drawn): number {
+  return layer.mark === "line" || layer.mark === "band"
+    ? Math.max(1, Math.ceil((layer.x.length - 1) / 24))
+    : 1;
 }

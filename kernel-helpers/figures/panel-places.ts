@@ -1,4 +1,5 @@
-import type { PlotTrace } from "./plot-traces.js";
+import type { Panel } from "./figure.js";
+import { axisName, type PlotTrace } from "./plot-traces.js";
 
 /** Where one panel stands: shares of the plot's width and height, and how many letters its axis titles hold. */
 export interface PanelPlace {
@@ -6,6 +7,8 @@ export interface PanelPlace {
   readonly y: readonly [number, number];
   readonly columns: number;
   readonly rows: number;
+  /** Pixels that the labels of the upright axis take. */
+  readonly labels: number;
 }
 
 /** The places of all panels, and the pixels around them. */
@@ -19,7 +22,8 @@ export interface PanelPlaces {
     readonly b: number;
     readonly pad: number;
   };
-  readonly legend: Readonly<Record<string, unknown>>;
+  /** Lower edge of the legend, as a share of the plot's height. */
+  readonly legend: number;
 }
 
 const letter = 7.4;
@@ -27,38 +31,53 @@ const narrow = 560;
 
 /** Lays panels out in one column on a narrow screen, else in two (three when there are many). */
 export function panelPlaces(
-  count: number,
+  shown: readonly Panel[],
   width: number,
   title: number,
   data: readonly PlotTrace[],
 ): PanelPlaces {
+  const count = shown.length;
   const across = count === 1 || width < narrow ? 1 : count > 6 ? 3 : 2;
   const down = Math.ceil(count / across);
   const each = count === 1 ? (width < narrow ? 300 : 340) : 230;
-  const gapX = 78;
-  const gapY = 88;
-  const margin = {
-    l: 68,
-    r: 18,
-    t: title + legendHeight(data, width - 86) + (count > 1 ? 30 : 10),
-    b: 60,
-    pad: 0,
-  };
+  const labels = shown.map((_, at) => labelWidth(data, at));
+  const left = Math.max(...labels) + 34;
+  const top = title + legendHeight(data, width - left - 18) + (count > 1 ? 30 : 10);
+  const margin = { l: left, r: 18, t: top, b: 60, pad: 0 };
+  const gapX = left + 10;
+  const gapY = 92;
   const plotWidth = width - margin.l - margin.r;
   const plotHeight = down * each + (down - 1) * gapY;
   const panelWidth = (plotWidth - (across - 1) * gapX) / across;
-  const panels = Array.from({ length: count }, (_, at) => {
-    const left = (at % across) * (panelWidth + gapX);
-    const top = Math.floor(at / across) * (each + gapY);
+  const panels = shown.map((_, at) => {
+    const start = (at % across) * (panelWidth + gapX);
+    const above = Math.floor(at / across) * (each + gapY);
     return {
-      x: [left / plotWidth, (left + panelWidth) / plotWidth] as const,
-      y: [1 - (top + each) / plotHeight, 1 - top / plotHeight] as const,
+      x: [start / plotWidth, (start + panelWidth) / plotWidth] as const,
+      y: [1 - (above + each) / plotHeight, 1 - above / plotHeight] as const,
       columns: Math.floor((panelWidth + gapX / 2) / letter),
       rows: Math.floor(each / letter),
+      labels: labels[at] ?? 40,
     };
   });
-  const legend = count > 1 ? { y: 1 + 30 / plotHeight } : { y: 1 + 4 / plotHeight };
-  return { panels, height: margin.t + plotHeight + margin.b, margin, legend };
+  return {
+    panels,
+    height: margin.t + plotHeight + margin.b,
+    margin,
+    legend: 1 + (count > 1 ? 28 : 4) / plotHeight,
+  };
+}
+
+/** Pixels for the longest label of an upright axis: names as they are, numbers by the digits that ticks need. */
+function labelWidth(data: readonly PlotTrace[], at: number): number {
+  const values = data
+    .filter((trace) => trace["yaxis"] === axisName("y", at))
+    .flatMap((trace) => trace["y"] as unknown[]);
+  const names = values.filter((value) => typeof value === "string").flatMap((name) => name.split("<br>"));
+  if (names.length > 0) return Math.min(190, Math.max(...names.map((name) => name.length)) * letter + 16);
+  const sizes = values.filter((value) => typeof value === "number").map(Math.abs);
+  const greatest = sizes.reduce((most, size) => Math.max(most, size), 0);
+  return greatest >= 1e5 || (greatest > 0 && greatest < 0.01) ? 64 : 46;
 }
 
 /** Height of a legend that stands above the panels and breaks into rows of equal columns. */

@@ -15,12 +15,16 @@ const packages = createRequire(__filename);
  * is as quick as the rest.
  */
 export async function pictureStudio(): Promise<DrawPicture> {
-  const [{ JSDOM }, { Resvg }, library] = await Promise.all([
+  const [{ JSDOM, VirtualConsole }, { Resvg }, library] = await Promise.all([
     import("jsdom"),
     import("@resvg/resvg-js"),
     readFile(packages.resolve("plotly.js-basic-dist-min"), "utf8"),
   ]);
-  const page = new JSDOM("<!doctype html><body></body>", { runScripts: "outside-only" });
+  const page = new JSDOM("<!doctype html><body></body>", {
+    runScripts: "outside-only",
+    // What the library logs is about a screen that is not there.
+    virtualConsole: new VirtualConsole(),
+  });
   const window = page.window as PageWindow;
   standIns(window);
   window.eval(library);
@@ -51,17 +55,30 @@ function standIns(window: PageWindow): void {
     return textBox.call(this).width;
   };
   Element.prototype["getBoundingClientRect"] = function (this: PageElement) {
-    const { width, height } = textBox.call(this);
-    return { x: 0, y: 0, left: 0, top: 0, right: width, bottom: height, width, height };
+    const { x, y, width, height } = textBox.call(this);
+    return { x, y, left: x, top: y, right: x + width, bottom: y + height, width, height };
   };
 }
 
+/** The box of a text whose first line begins (or, by its anchor, centres or ends) at the origin. */
 function textBox(this: PageElement): { x: number; y: number; width: number; height: number } {
-  const size = Number.parseFloat(this.style?.fontSize || "13") || 13;
   const spans = [...this.querySelectorAll("tspan.line")].map((span) => span.textContent ?? "");
   const lines = spans.length > 0 ? spans : [this.textContent ?? ""];
-  const width = Math.max(...lines.map((line) => line.length)) * size * 0.6;
-  return { x: 0, y: -size, width, height: lines.length * size * 1.3 };
+  const width = Math.max(...lines.map((line) => line.length)) * letterWidth(this);
+  if (width === 0) return { x: 0, y: 0, width: 0, height: 0 };
+  const size = fontSize(this);
+  const anchor = this.getAttribute("text-anchor");
+  const x = anchor === "middle" ? -width / 2 : anchor === "end" ? -width : 0;
+  return { x, y: -0.8 * size, width, height: lines.length * size * 1.3 };
+}
+
+function fontSize(element: PageElement): number {
+  return Number.parseFloat(element.style?.fontSize || "13") || 13;
+}
+
+/** A letter of a plain typeface is about six tenths as wide as it is high, a bold one a little more. */
+function letterWidth(element: PageElement): number {
+  return fontSize(element) * (element.style?.fontWeight === "bold" ? 0.66 : 0.6);
 }
 
 /** The little that is used of a page's window. */
@@ -76,7 +93,8 @@ interface PageWindow {
 }
 
 interface PageElement {
-  readonly style?: { readonly fontSize?: string };
+  readonly style?: { readonly fontSize?: string; readonly fontWeight?: string };
+  getAttribute(name: string): string | null;
   readonly textContent: string | null;
   querySelectorAll(selector: string): Iterable<{ readonly textContent: string | null }>;
 }

@@ -9,29 +9,16 @@ import { axisName, type PlotTrace } from "./plot-traces.js";
 /** Layout of the plotting library, as data; `height` in pixels. */
 export type PlotLayout = Readonly<Record<string, unknown>> & { readonly height: number };
 
-/**
- * Places panels, axes, marks, legend and, for a picture, the title, for a width in pixels. The live plot carries
- * its title in the page instead, where it can wrap.
- */
+/** Places panels, axes, marks and legend for a width in pixels; `still` as in `plotSpec`. */
 export function plotLayout(
   figure: Figure,
   data: readonly PlotTrace[],
   width: number,
-  titled: boolean,
+  still: boolean,
 ): PlotLayout {
-  const places = panelPlaces(
-    figure.panels.length,
-    width,
-    titled ? titleHeight(figure.title, width) : 0,
-    data,
-  );
-  const axes = Object.fromEntries(
-    figure.panels.flatMap((panel, at) => panelAxes(panel, at, places.panels[at] as PanelPlace)),
-  );
-  const marks = figure.panels.map((panel, at) => panelMarks(panel, at));
-  const headings = figure.panels.flatMap((panel, at) =>
-    panelHeading(panel, at, places.panels[at] as PanelPlace),
-  );
+  const places = panelPlaces(figure.panels, width, still ? titleHeight(figure.title, width) : 0, data);
+  const each = figure.panels.map((panel, at) => ({ panel, at, place: places.panels[at] as PanelPlace }));
+  const marks = each.map(({ panel, at }) => panelMarks(panel, at));
   return {
     width,
     height: places.height,
@@ -41,20 +28,16 @@ export function plotLayout(
     font: { family: typeface, size: 13, color: look.ink },
     hoverlabel: { font: { family: typeface, size: 13 } },
     showlegend: data.filter((trace) => trace["showlegend"]).length > 1,
-    legend: {
-      orientation: "h",
-      x: 0,
-      xanchor: "left",
-      y: 1,
-      yanchor: "bottom",
-      yref: "paper",
-      ...places.legend,
-    },
+    legend: { orientation: "h", x: 0, xanchor: "left", y: places.legend, yanchor: "bottom" },
     shapes: marks.flatMap((mark) => mark.shapes),
-    annotations: [...marks.flatMap((mark) => mark.annotations), ...headings],
+    annotations: [
+      ...marks.flatMap((mark) => mark.annotations),
+      ...each.flatMap(({ panel, at, place }) => panelHeading(panel, at, place)),
+      ...(still ? each.flatMap(({ panel, at, place }) => stillTitles(panel, at, place)) : []),
+    ],
     bargap: 0.35,
-    ...(titled ? { title: pictureTitle(figure.title, width) } : {}),
-    ...axes,
+    ...(still ? { title: pictureTitle(figure.title, width) } : {}),
+    ...Object.fromEntries(each.flatMap(({ panel, at, place }) => panelAxes(panel, at, place, still))),
   };
 }
 
@@ -81,25 +64,29 @@ function pictureTitle(title: string, width: number): object {
   };
 }
 
-function panelAxes(panel: Panel, at: number, place: PanelPlace): [string, object][] {
+function panelAxes(panel: Panel, at: number, place: PanelPlace, still: boolean): [string, object][] {
   const x = axisName("x", at);
   const y = axisName("y", at);
   const long = (name: string): string => name.replace(/^[xy]/, (letter) => `${letter}axis`);
   return [
-    [long(x), { ...axisLook(panel.x, place.columns), domain: place.x, anchor: y }],
-    [long(y), { ...axisLook(panel.y, place.rows), domain: place.y, anchor: x }],
+    [long(x), { ...axisLook(panel.x, place.columns, still), domain: place.x, anchor: y }],
+    [long(y), { ...axisLook(panel.y, place.rows, still), domain: place.y, anchor: x }],
   ];
 }
 
-function axisLook(axis: Axis, columns: number): object {
+function axisLook(axis: Axis, columns: number, still: boolean): object {
   const type = axis.scale === undefined ? "linear" : axis.scale;
   const ends = type === "log" ? axis.ends?.map(Math.log10) : axis.ends;
   return {
-    title: { text: plotText(axisTitle(axis), columns), standoff: 8 },
+    ...(still
+      ? {}
+      : { title: { text: plotText(axisTitle(axis), columns), standoff: 8, font: { size: 13 } } }),
     type,
     ...(ends ? { range: ends } : {}),
     ...(type === "category" ? { autorange: "reversed" } : {}),
-    automargin: true,
+    automargin: !still,
+    ...(still ? { ticklabeloverflow: "allow" } : {}),
+    ...(type === "category" ? {} : { tickangle: 0 }),
     showline: true,
     linecolor: look.quiet,
     linewidth: 1.5,
@@ -108,10 +95,30 @@ function axisLook(axis: Axis, columns: number): object {
     ticklen: 5,
     gridcolor: "#e3e8e6",
     zeroline: false,
-    nticks: columns < 30 ? 5 : 8,
+    nticks: columns < 50 ? 5 : 8,
     separatethousands: true,
     exponentformat: "power",
   };
+}
+
+function stillTitles(panel: Panel, at: number, place: PanelPlace): object[] {
+  const where = {
+    xref: `${axisName("x", at)} domain`,
+    yref: `${axisName("y", at)} domain`,
+    showarrow: false,
+  };
+  const x = { text: plotText(axisTitle(panel.x), place.columns), x: 0.5, y: 0, yanchor: "top", yshift: -24 };
+  const y = {
+    text: plotText(axisTitle(panel.y), place.rows),
+    x: 0,
+    y: 0.5,
+    xanchor: "right",
+    textangle: -90,
+  };
+  return [
+    { ...where, ...x },
+    { ...where, ...y, xshift: -place.labels },
+  ];
 }
 
 interface Marks {
@@ -125,7 +132,7 @@ function panelMarks(panel: Panel, at: number): Marks {
     const { colour } = seriesStyle(layer.style ?? turn);
     if (layer.mark === "threshold") return threshold(layer, at, colour);
     if (layer.mark === "vertical") return vertical(layer, at, colour, upright++);
-    if (layer.mark === "arrow") return { shapes: [], annotations: [arrow(layer, at, colour)] };
+    if (layer.mark === "arrow") return { shapes: [], annotations: arrow(layer, at, colour) };
     return { shapes: [], annotations: [] };
   });
   return {
@@ -174,27 +181,30 @@ function label(layer: Layer, where: object): object {
   };
 }
 
-function arrow(layer: ArrowLayer, at: number, colour: string): object {
-  const [ax, ay] = { left: [34, 0], right: [-34, 0], up: [0, 34], down: [0, -34] }[layer.towards] as [
-    number,
-    number,
-  ];
-  return {
-    xref: axisName("x", at),
-    yref: axisName("y", at),
-    x: layer.x,
-    y: layer.y,
+/** The arrow and its words apart: drawn as one, the words would cover a short arrow. */
+function arrow(layer: ArrowLayer, at: number, colour: string): object[] {
+  const [ax, ay] = tails[layer.towards];
+  const where = { xref: axisName("x", at), yref: axisName("y", at), x: layer.x, y: layer.y };
+  const head = {
+    ...where,
     ax,
     ay,
     showarrow: true,
     arrowhead: 2,
-    arrowsize: 1.3,
+    arrowsize: 1.2,
     arrowwidth: 2.2,
     arrowcolor: colour,
-    text: plotText(layer.name, 26, 2),
-    font: { size: 12, color: look.ink },
   };
+  if (layer.inLegend === false) return [head];
+  const xanchor = layer.towards === "left" ? "left" : "right";
+  return [
+    head,
+    label(layer, { ...where, xanchor, yanchor: "top", yshift: layer.towards === "up" ? -38 : -5 }),
+  ];
 }
+
+/** Pixels from an arrow's head to its tail. */
+const tails = { left: [36, 0], right: [-36, 0], up: [0, 36], down: [0, -36] } as const;
 
 function panelHeading(panel: Panel, at: number, place: PanelPlace): object[] {
   if (panel.title === "") return [];

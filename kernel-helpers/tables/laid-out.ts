@@ -28,7 +28,9 @@ export function laidOut(table: Table): LaidOut {
   const places = [...Array(head).keys(), ...Array.from({ length: tail }, (_, i) => rows.length - tail + i)];
   const marks = footnoteMarks(table.notes);
   const texts = [...places.map((place) => rows[place] ?? {}), ...totals].map((row) =>
-    columns.map((column) => cellText(column, row, format)),
+    columns.map((column) =>
+      totals.includes(row) && row[column.key] === undefined ? "" : cellText(column, row, format),
+    ),
   );
   alignFractions(texts, columns, format.decimal);
   const cells = texts.map((line, at) =>

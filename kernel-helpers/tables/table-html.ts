@@ -61,7 +61,7 @@ ${box}{margin:.8em 0 1em;color:${look.ink};font-family:${typeface};font-size:14p
 ${box} .pw-scroll{overflow-x:auto;max-width:100%}
 ${box} table{border-collapse:collapse;border:0;border-top:3px solid ${look.accent};background:${look.paper};margin:0;font-size:14px;width:auto;table-layout:auto}
 ${box} caption{caption-side:top;text-align:left;font-weight:600;font-size:15px;color:${look.ink};padding:0 0 .4em;overflow-wrap:anywhere}
-${box} th,${box} td{border:0;border-bottom:1px solid ${look.line};padding:.32em .8em;vertical-align:baseline;max-width:28em;overflow-wrap:anywhere;background:none;color:${look.ink};white-space:normal}
+${box} th,${box} td{border:0;border-bottom:1px solid ${look.line};padding:.32em .8em;vertical-align:baseline;max-width:28em;overflow-wrap:break-word;background:none;color:${look.ink};white-space:normal}
 ${box} thead th{font-weight:600;color:${look.quiet};background:${look.shade};vertical-align:bottom;min-width:3.5em}
 ${box} .pw-n{text-align:right;font-variant-numeric:tabular-nums;white-space:nowrap}
 ${box} thead .pw-n{white-space:normal}
