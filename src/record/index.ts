@@ -1,6 +1,12 @@
 export type { CalendarName } from "./calendar.js";
 export { type Column, type ColumnTable, columnNamed, isEmpty, rowCount, tableOf } from "./column-table.js";
 export type { Decision } from "./decision.js";
+export {
+  type DifferenceOptions,
+  type DifferenceSeries,
+  type Differences,
+  differences,
+} from "./differences.js";
 export type { Finding } from "./finding.js";
 export type { CensoringLimits, DuplicateChoice, ObservationOptions } from "./observation-options.js";
 export type {
