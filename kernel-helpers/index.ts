@@ -1,1 +1,16 @@
-export { ModelError } from "../src/numeric/index.js";
+export type { Reach, ReachOptions } from "../src/decision/index.js";
+export type { Estimate, Fit, FitOptions, GroupFit, Interval } from "../src/estimate/index.js";
+export type { Comparison } from "../src/evidence/index.js";
+export { leastSquares, ModelError } from "../src/numeric/index.js";
+export type { Forecast, ForecastOptions } from "../src/projection/index.js";
+export type { Finding, Observations } from "../src/record/index.js";
+export { answer, type CaseOptions, closeCase, openCase } from "./commands/case.js";
+export type { Domain } from "./commands/cautions.js";
+export { compare } from "./commands/comparisons.js";
+export { reaches } from "./commands/decisions.js";
+export { fit } from "./commands/fits.js";
+export { forecast } from "./commands/projections.js";
+export { type RecurrenceOptions, type Rule, recurrence } from "./commands/rules.js";
+export { show } from "./commands/show.js";
+export { type Figure, type FigureOptions, figure } from "./figures/index.js";
+export { type Table, type TableOptions, table } from "./tables/index.js";

@@ -10,12 +10,11 @@ import { type FitPoint, fitPoints } from "./fit-points.js";
 import { fitWarnings } from "./fit-warnings.js";
 import { type Interval, waldInterval } from "./interval.js";
 import { normalEquations } from "./normal-equations.js";
-import { oneStepRows } from "./one-step-rows.js";
 import { type Profile, profileInterval } from "./profile-interval.js";
 import { refuseNoStart } from "./refusals.js";
 import type { ResidualRows } from "./residual-rows.js";
+import { rowsOf } from "./rows-of.js";
 import { startingPoints } from "./starting-points.js";
-import { trajectoryRows } from "./trajectory-rows.js";
 import { place, type Unknowns, unknownsOf } from "./unknowns.js";
 
 /** One unknown of a fit. */
@@ -66,8 +65,7 @@ export function fitGroup(rule: Rule, group: ObservedGroup, options: FitOptions):
   const unknowns = unknownsOf(rule, options);
   checkGroup(rule, group, options, unknowns);
   const compiled = compileRule(rule);
-  const makeRows = options.errors === "process" ? oneStepRows : trajectoryRows;
-  const rows = makeRows(rule, compiled, group, unknowns, options.spread ?? "constant");
+  const rows = rowsOf(rule, compiled, group, unknowns, options);
   const starts = startingPoints(rule, compiled, group, options, unknowns, rows);
   if (starts.length === 0) throw refuseNoStart(group, rule.text);
   const system = normalEquations(rows);

@@ -4,4 +4,5 @@ export type { ErrorKind, FitOptions, Spread } from "./fit-options.js";
 export type { FitPoint } from "./fit-points.js";
 export type { Estimate, GroupFit } from "./group-fit.js";
 export type { Interval } from "./interval.js";
+export { type SecondOpinion, secondOpinion } from "./second-opinion.js";
 export { type EstimateRow, estimates, points, type SummaryRow, summary } from "./views.js";

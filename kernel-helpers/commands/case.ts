@@ -1,0 +1,96 @@
+import { escapeHtml, look, showing, typeface } from "../tables/index.js";
+import { type CaseHead, caseLog, defaultSeed } from "./case-log.js";
+import { cautionOf, type Domain, domainCautions } from "./cautions.js";
+import { refuseEmptyAnswer, refuseNoCase, refuseUnanswered, refuseUnknownDomain } from "./refusals.js";
+import { rerunBlock } from "./rerun-block.js";
+import { type Shown, show } from "./show.js";
+import { shownTogether } from "./shown-together.js";
+
+/** What a case begins with. */
+export interface CaseOptions {
+  readonly title: string;
+  /** In the client's words. */
+  readonly question: string;
+  readonly domain: Domain;
+  /** Seed of every draw in the notebook; without it 1, which is shown. */
+  readonly seed?: number;
+  /** Date of the case, printed as given. */
+  readonly date?: string;
+}
+
+/**
+ * Opens a case: prints its title and question, and sets the seed that the commands draw with.
+ *
+ * @throws {ModelError} `unknown-domain`.
+ * @example openCase({ title: "Algae line 3", question: "When can it be drawn down?", domain: "cultures", seed: 7 });
+ */
+export function openCase(options: CaseOptions): void {
+  const known = Object.keys(domainCautions);
+  if (!known.includes(options.domain)) throw refuseUnknownDomain(options.domain, known);
+  const head: CaseHead = { ...options, seed: options.seed ?? defaultSeed };
+  caseLog.open(head);
+  const under = [
+    `Field: ${options.domain}`,
+    `seed ${head.seed}`,
+    ...(options.date ? [options.date] : []),
+  ].join(" · ");
+  show(
+    block(
+      `<p style="margin:0;font-size:20px;font-weight:600">${escapeHtml(head.title)}</p>` +
+        `<p style="margin:.3em 0;font-size:16px">${escapeHtml(head.question)}</p>` +
+        `<p style="margin:0;color:${look.quiet};font-size:13px">${escapeHtml(under)}</p>`,
+      `${head.title}\n${head.question}\n${under}`,
+    ),
+  );
+}
+
+/**
+ * States the answer of the case: one plain sentence with number, unit, margin and condition.
+ *
+ * The sentence is also what `npm start` prints for the notebook.
+ *
+ * @throws {ModelError} `no-case-open` | `empty-answer`.
+ * @example answer(`Draw down at hour 138. ${ready.sentence}`);
+ */
+export function answer(sentence: string): void {
+  if (caseLog.head() === undefined) throw refuseNoCase("answer(...)");
+  if (sentence.trim() === "") throw refuseEmptyAnswer();
+  caseLog.noteAnswer(sentence);
+  const html =
+    `<p style="margin:0;color:${look.quiet};font-size:13px;font-weight:600">Answer</p>` +
+    `<p style="margin:.2em 0 0;font-size:17px">${escapeHtml(sentence)}</p>`;
+  show(
+    showing({ kind: "answer", sentence }, () => ({
+      "application/vnd.periodwise.answer+json": { sentence },
+      "text/html": boxed(html),
+      "text/plain": `Answer: ${sentence}`,
+    })),
+  );
+}
+
+/**
+ * Closes the case: limits and caution, then all that a colleague needs to rerun it to the same digits.
+ *
+ * @throws {ModelError} `no-case-open` | `case-not-answered`.
+ * @example closeCase();
+ */
+export function closeCase(): void {
+  const head = caseLog.head();
+  if (head === undefined) throw refuseNoCase("closeCase()");
+  if (caseLog.answers().length === 0) throw refuseUnanswered();
+  const caution = cautionOf(head.domain as Domain);
+  const limits = block(
+    `<p style="margin:0;font-weight:600">Limits and caution</p><p style="margin:.3em 0 0">${escapeHtml(caution)}</p>`,
+    `Limits and caution\n${caution}`,
+  );
+  show(showing({ kind: "case-end" }, () => shownTogether([limits, rerunBlock()])));
+}
+
+function block(html: string, text: string): Shown {
+  return showing({ kind: "block" }, () => ({ "text/html": boxed(html), "text/plain": text }));
+}
+
+function boxed(html: string): string {
+  const style = `border-left:4px solid ${look.accent};background:${look.shade};color:${look.ink};padding:.8em 1.1em;margin:.6em 0;font-family:${typeface};line-height:1.45;max-width:60em;overflow-wrap:anywhere`;
+  return `<div class="pw-block" dir="auto" style="${style}">${html}</div>`;
+}

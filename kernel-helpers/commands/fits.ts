@@ -1,0 +1,110 @@
+import {
+  type EstimateRow,
+  estimates,
+  type Fit,
+  type FitOptions,
+  fit as fitRule,
+  type GroupFit,
+  secondOpinion,
+} from "../../src/estimate/index.js";
+import type { Observations } from "../../src/record/index.js";
+import type { Rule } from "../../src/rule/index.js";
+import { type Figure, figure } from "../figures/index.js";
+import { showing, type Table, table } from "../tables/index.js";
+import { caseLog } from "./case-log.js";
+import { shownTogether } from "./shown-together.js";
+
+/**
+ * Estimates the constants of a rule from a record; the result shows its estimates, its conventions and warnings,
+ * and observed against fitted values.
+ *
+ * The engine's `fit` says what is minimised and which errors are thrown.
+ *
+ * @example fit(crowding, counts, { errors: "observation", spread: "proportional" });
+ */
+export function fit(rule: Rule, observations: Observations, options: FitOptions): Fit {
+  const fitted = fitRule(rule, observations, options);
+  caseLog.noteStep(
+    `fit "${rule.text}" with errors: ${options.errors}, spread: ${options.spread ?? "constant"}`,
+  );
+  return showing({ ...fitted }, () => shownTogether([estimatesTable(fitted), fittedFigure(fitted)]));
+}
+
+function estimatesTable(fitted: Fit): Table {
+  const grouped = fitted.groups.length > 1;
+  const limit = (value: number | undefined): number | string => value ?? "none";
+  const rows = estimates(fitted).map((row: EstimateRow) => ({
+    ...row,
+    error: row.standardError ?? "not determined",
+    lower: limit(row.profile.lower),
+    upper: limit(row.profile.upper),
+  }));
+  const percent = `${100 * (fitted.options.level ?? 0.95)}%`;
+  return table({
+    title: `Estimates of ${fitted.rule.text}`,
+    columns: [
+      ...(grouped ? [{ key: "group", label: "Group", kind: "text" } as const] : []),
+      { key: "name", label: "Constant", kind: "text" },
+      { key: "unit", label: "Unit", kind: "text" },
+      { key: "value", label: "Estimate", kind: "estimate", pairedWith: "standardError" },
+      { key: "error", label: "Standard error", kind: "number", digits: 2 },
+      {
+        key: "lower",
+        label: `Profile interval ${percent}, from`,
+        kind: "estimate",
+        pairedWith: "standardError",
+      },
+      { key: "upper", label: "to", kind: "estimate", pairedWith: "standardError" },
+    ],
+    rows,
+    notes: [
+      ...fitted.groups.flatMap((group) => groupNotes(fitted, group)),
+      ...warningsOf(fitted),
+      ...fitted.conventions,
+    ],
+  });
+}
+
+function groupNotes(fitted: Fit, group: GroupFit): string[] {
+  const who = group.group === "" ? "" : `${group.group}: `;
+  const { digits, sentence } = secondOpinion(fitted, group);
+  const told =
+    digits !== undefined && fitted.groups.length > 1 ? `second solver agrees to ${digits} digits` : sentence;
+  const sigma = group.sigma.toPrecision(3);
+  return [
+    `${who}${group.count} residuals, sigma ${sigma}, AICc ${group.criteria.aicCorrected.toFixed(2)}. ${told}`,
+  ];
+}
+
+function warningsOf(fitted: Fit): string[] {
+  const all = [
+    ...fitted.warnings.map((warning) => warning.message),
+    ...fitted.groups.flatMap((group) =>
+      group.warnings.map((warning) =>
+        group.group === "" ? warning.message : `${group.group}: ${warning.message}`,
+      ),
+    ),
+  ];
+  return all.map((message) => `Caution: ${message}`);
+}
+
+function fittedFigure(fitted: Fit): Figure {
+  const { period, states } = fitted.observations;
+  const x = { title: period.column, unit: period.unit };
+  const panels = fitted.groups.flatMap((group) =>
+    states.map((state) => {
+      const points = group.points.filter((point) => point.state === state.name);
+      const time = points.map((point) => point.time);
+      return {
+        title: group.group,
+        x,
+        y: { title: state.name, unit: state.unit },
+        layers: [
+          { mark: "line", name: "fitted", x: time, y: points.map((point) => point.fitted) } as const,
+          { mark: "points", name: "observed", x: time, y: points.map((point) => point.observed) } as const,
+        ],
+      };
+    }),
+  );
+  return figure({ title: `Observed and fitted: ${fitted.rule.text}`, panels });
+}

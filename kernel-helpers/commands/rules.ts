@@ -1,0 +1,1 @@
+export { type RecurrenceOptions, type Rule, recurrence } from "../../src/rule/index.js";

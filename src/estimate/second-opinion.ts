@@ -1,0 +1,65 @@
+import { levenbergMarquardt } from "ml-levenberg-marquardt";
+import { compileRule } from "../rule/index.js";
+import type { Fit } from "./fit.js";
+import type { GroupFit } from "./group-fit.js";
+import { rowsOf } from "./rows-of.js";
+import { unknownsOf } from "./unknowns.js";
+
+/** What an independent solver says of a fit. */
+export interface SecondOpinion {
+  /** Correct digits on which every estimate agrees, at most 11; undefined where the other solver failed. */
+  readonly digits: number | undefined;
+  readonly sentence: string;
+}
+
+/**
+ * Refits one group with ml-levenberg-marquardt, from every estimate displaced by one standard error, and counts the
+ * digits on which the two agree.
+ *
+ * Unknowns are scaled to 1 and `errorTolerance` is 0, without which that solver stops early on records in small units.
+ */
+export function secondOpinion(fit: Fit, group: GroupFit): SecondOpinion {
+  const recorded = fit.observations.groups.find((each) => each.name === group.group)!;
+  const unknowns = unknownsOf(fit.rule, fit.options);
+  const rows = rowsOf(fit.rule, compileRule(fit.rule), recorded, unknowns, fit.options);
+  const values = group.estimates.map((estimate) => estimate.value);
+  const scales = values.map((value) => Math.abs(value) || 1);
+  const start = group.estimates.map(
+    (estimate, i) => (estimate.value + (estimate.standardError ?? 0.01 * scales[i]!)) / scales[i]!,
+  );
+  const at = new Float64Array(values.length);
+  const residuals = (scaled: readonly number[]): ((i: number) => number) => {
+    scaled.forEach((value, i) => {
+      at[i] = value * scales[i]!;
+    });
+    rows.prepare(at, false);
+    const all = Float64Array.from({ length: rows.count }, (_, i) => -rows.residualAt(i));
+    return (i) => all[i]!;
+  };
+  const x = Array.from({ length: rows.count }, (_, i) => i);
+  try {
+    const { parameterValues } = levenbergMarquardt({ x, y: x.map(() => 0) }, residuals, {
+      initialValues: start,
+      errorTolerance: 0,
+      maxIterations: 100,
+      damping: 1e-2,
+      gradientDifference: 1e-6,
+      centralDifference: true,
+    });
+    return opinionOf(
+      values,
+      parameterValues.map((value, i) => value * scales[i]!),
+    );
+  } catch (cause) {
+    return { digits: undefined, sentence: `The second solver gave no answer (${(cause as Error).message}).` };
+  }
+}
+
+function opinionOf(ours: readonly number[], theirs: readonly number[]): SecondOpinion {
+  const digits = Math.min(
+    11,
+    ...ours.map((value, i) => Math.max(0, -Math.log10(Math.abs(value - theirs[i]!) / Math.abs(value)))),
+  );
+  const whole = Math.floor(digits);
+  return { digits: whole, sentence: `A second solver (ml-levenberg-marquardt) agrees to ${whole} digits.` };
+}
