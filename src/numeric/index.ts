@@ -12,6 +12,7 @@ export {
   studentQuantile,
 } from "./distributions.js";
 export { findRoot, type RootOptions } from "./find-root.js";
+export { type LeastSquaresProblem, type LeastSquaresSolution, leastSquares } from "./least-squares.js";
 export type { LinearisedSystem } from "./linearised-system.js";
 export { type MinimiseOptions, type Minimum, minimiseSquares } from "./minimise-squares.js";
 export { ModelError } from "./model-error.js";

@@ -22,3 +22,51 @@ export function badSeed(seed: unknown): ModelError {
     { seed },
   );
 }
+
+export function residualsOfOtherLength(expected: number, found: number): ModelError {
+  return new ModelError(
+    "residuals-of-other-length",
+    `The residual function gave ${found} values after giving ${expected} at the start. Give one residual for every observation, at whatever constants; where the model is not defined, give NaN.`,
+    { expected, found },
+  );
+}
+
+export function jacobianOfOtherShape(rows: number, size: number, found: number): ModelError {
+  return new ModelError(
+    "jacobian-of-other-shape",
+    `The Jacobian has ${found} entries, but ${rows} residuals by ${size} constants need ${rows * size}. Give it row after row: the derivatives of the first residual by every constant come first.`,
+    { rows, size, found },
+  );
+}
+
+export function tooFewResiduals(rows: number, size: number): ModelError {
+  return new ModelError(
+    "too-few-residuals",
+    `${rows} residuals cannot determine ${size} constants. Give at least as many residuals as constants, or hold some constants fixed.`,
+    { rows, size },
+  );
+}
+
+export function badStart(position: number, value: number): ModelError {
+  return new ModelError(
+    "bad-start",
+    `Start value ${position + 1} is ${value}. Give a finite number to start every constant from.`,
+    { position, value },
+  );
+}
+
+export function badBounds(position: number, lower: number, upper: number): ModelError {
+  return new ModelError(
+    "bad-bounds",
+    `Constant ${position + 1} has the lower bound ${lower} and the upper bound ${upper}. Give a lower bound that is not above the upper one.`,
+    { position, lower, upper },
+  );
+}
+
+export function otherNumberOf(what: string, expected: number, found: number): ModelError {
+  return new ModelError(
+    "other-number-of-constants",
+    `The start has ${expected} constants but ${what} has ${found} entries. Give one entry a constant, in the same order.`,
+    { what, expected, found },
+  );
+}

@@ -38,6 +38,8 @@ const derivativesLost: StopReason = Object.freeze({
 
 /** Relative reduction below which rounding, not the model, may decide how the sum of squares changes. */
 const refining = 1e-9;
+/** Least share of the predicted reduction that a step must bring. */
+const leastRatio = 1e-4;
 const rounding = 2 * Number.EPSILON;
 
 /** Takes up the linear model of the system at the point reached; says whether it is the optimum. */
@@ -70,27 +72,32 @@ export function tryStep(problem: SearchProblem, at: Search): StopReason | undefi
   at.evaluations++;
   const actual = sum < 100 * at.sum ? 1 - sum / at.sum : -1;
   const predicted = predictedReduction(system.triangle, system.projected, step) / at.sum;
-  const refines = at.damping === 0 && predicted <= refining;
+  if (at.damping === 0 && predicted <= refining) return refine(problem, at, sum, actual, length);
   const ratio = predicted > 0 ? actual / predicted : 0;
   changeRadius(problem, at, length, actual, ratio);
-  const taken = refines ? actual >= -refining && length < 0.95 * at.lastRefinement : ratio >= 1e-4;
-  if (!taken) return refines ? byReduction : tooSmall(problem, at, Number.POSITIVE_INFINITY);
-  const settled = move(problem, at, sum, refines ? length : undefined);
-  if (settled !== undefined) return settled;
-  return !refines && predicted <= rounding && Math.abs(actual) <= rounding ? byReduction : undefined;
+  if (ratio < leastRatio) return tooSmall(problem, at, at.radius);
+  const settled = move(problem, at, sum) ?? tooSmall(problem, at, at.radius);
+  return settled ?? (predicted <= rounding && Math.abs(actual) <= rounding ? byReduction : undefined);
 }
 
-function move(
+/** Takes an undamped step near the optimum, unless the sum rises or the steps no longer shrink. */
+function refine(
   problem: SearchProblem,
   at: Search,
   sum: number,
-  refinement: number | undefined,
+  actual: number,
+  length: number,
 ): StopReason | undefined {
+  if (actual < -refining || length > 0.95 * at.lastRefinement) return byReduction;
+  at.lastRefinement = length;
+  return move(problem, at, sum) ?? tooSmall(problem, at, length);
+}
+
+function move(problem: SearchProblem, at: Search, sum: number): StopReason | undefined {
   at.constants.set(problem.workspace.trial);
   at.sum = sum;
   at.iterations++;
-  at.lastRefinement = refinement ?? at.lastRefinement;
-  return settle(problem, at) ?? tooSmall(problem, at, refinement ?? Number.POSITIVE_INFINITY);
+  return settle(problem, at);
 }
 
 function findStep(problem: SearchProblem, at: Search): void {
@@ -131,7 +138,7 @@ function cutAfter(problem: SearchProblem, actual: number, sum: number): number {
 function tooSmall(problem: SearchProblem, at: Search, length: number): StopReason | undefined {
   const { workspace, stepTolerance } = problem;
   const least = stepTolerance * scaledLength(workspace.scale, at.constants, workspace.size);
-  return Math.min(length, at.radius) <= least ? byStep : undefined;
+  return length <= least ? byStep : undefined;
 }
 
 /** Length of the residuals' part along the Jacobian of the constants that may move. */
