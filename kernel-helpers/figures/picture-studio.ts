@@ -1,5 +1,6 @@
 import { readFile } from "node:fs/promises";
 import { createRequire } from "node:module";
+import { type ScreenlessWindow, standInForScreen } from "./screen-stand-in.js";
 
 /** Draws one plot as a PNG. */
 export type DrawPicture = (
@@ -25,8 +26,8 @@ export async function pictureStudio(): Promise<DrawPicture> {
     // What the library logs is about a screen that is not there.
     virtualConsole: new VirtualConsole(),
   });
-  const window = page.window as PageWindow;
-  standIns(window);
+  const window = page.window as PlotWindow;
+  standInForScreen(window);
   window.eval(library);
   const draw: DrawPicture = async (data, layout) => {
     const size = { width: Number(layout["width"]), height: Number(layout["height"]) };
@@ -44,57 +45,8 @@ export async function pictureStudio(): Promise<DrawPicture> {
   return draw;
 }
 
-/** What the plotting library asks of a screen and jsdom does not have; sizes of text are estimated. */
-function standIns(window: PageWindow): void {
-  const { URL, Element, SVGElement, HTMLCanvasElement } = window;
-  URL.createObjectURL = () => "blob:none";
-  window.matchMedia = () => ({ matches: false, addListener() {}, removeListener() {} });
-  HTMLCanvasElement.prototype["getContext"] = () => null;
-  SVGElement.prototype["getBBox"] = textBox;
-  SVGElement.prototype["getComputedTextLength"] = function (this: PageElement) {
-    return textBox.call(this).width;
-  };
-  Element.prototype["getBoundingClientRect"] = function (this: PageElement) {
-    const { x, y, width, height } = textBox.call(this);
-    return { x, y, left: x, top: y, right: x + width, bottom: y + height, width, height };
-  };
-}
-
-/** The box of a text whose first line begins (or, by its anchor, centres or ends) at the origin. */
-function textBox(this: PageElement): { x: number; y: number; width: number; height: number } {
-  const spans = [...this.querySelectorAll("tspan.line")].map((span) => span.textContent ?? "");
-  const lines = spans.length > 0 ? spans : [this.textContent ?? ""];
-  const width = Math.max(...lines.map((line) => line.length)) * letterWidth(this);
-  if (width === 0) return { x: 0, y: 0, width: 0, height: 0 };
-  const size = fontSize(this);
-  const anchor = this.getAttribute("text-anchor");
-  const x = anchor === "middle" ? -width / 2 : anchor === "end" ? -width : 0;
-  return { x, y: -0.8 * size, width, height: lines.length * size * 1.3 };
-}
-
-function fontSize(element: PageElement): number {
-  return Number.parseFloat(element.style?.fontSize || "13") || 13;
-}
-
-/** A letter of a plain typeface is about six tenths as wide as it is high, a bold one a little more. */
-function letterWidth(element: PageElement): number {
-  return fontSize(element) * (element.style?.fontWeight === "bold" ? 0.66 : 0.6);
-}
-
-/** The little that is used of a page's window. */
-interface PageWindow {
+/** The page's window once the plotting library has run in it. */
+interface PlotWindow extends ScreenlessWindow {
   eval(code: string): unknown;
-  matchMedia: () => object;
-  readonly URL: { createObjectURL: () => string };
-  readonly Element: { readonly prototype: Record<string, unknown> };
-  readonly SVGElement: { readonly prototype: Record<string, unknown> };
-  readonly HTMLCanvasElement: { readonly prototype: Record<string, unknown> };
   readonly Plotly: { toImage(plot: object, options: object): Promise<string> };
-}
-
-interface PageElement {
-  readonly style?: { readonly fontSize?: string; readonly fontWeight?: string };
-  getAttribute(name: string): string | null;
-  readonly textContent: string | null;
-  querySelectorAll(selector: string): Iterable<{ readonly textContent: string | null }>;
 }

@@ -1,8 +1,7 @@
 import { look, typeface } from "../tables/index.js";
 import type { Axis, Figure, Panel } from "./figure.js";
-import type { ArrowLayer, Layer, ThresholdLayer, VerticalLayer } from "./layer.js";
-import { seriesStyle } from "./palette.js";
 import { type PanelPlace, panelPlaces } from "./panel-places.js";
+import { panelMarks } from "./plot-marks.js";
 import { axisTitle, plotText } from "./plot-text.js";
 import { axisName, type PlotTrace } from "./plot-traces.js";
 
@@ -120,91 +119,6 @@ function stillTitles(panel: Panel, at: number, place: PanelPlace): object[] {
     { ...where, ...y, xshift: -place.labels },
   ];
 }
-
-interface Marks {
-  readonly shapes: readonly object[];
-  readonly annotations: readonly object[];
-}
-
-function panelMarks(panel: Panel, at: number): Marks {
-  let upright = 0;
-  const marks = panel.layers.map((layer, turn): Marks => {
-    const { colour } = seriesStyle(layer.style ?? turn);
-    if (layer.mark === "threshold") return threshold(layer, at, colour);
-    if (layer.mark === "vertical") return vertical(layer, at, colour, upright++);
-    if (layer.mark === "arrow") return { shapes: [], annotations: arrow(layer, at, colour) };
-    return { shapes: [], annotations: [] };
-  });
-  return {
-    shapes: marks.flatMap((mark) => mark.shapes),
-    annotations: marks.flatMap((mark) => mark.annotations),
-  };
-}
-
-function threshold(layer: ThresholdLayer, at: number, colour: string): Marks {
-  const xref = `${axisName("x", at)} domain`;
-  const yref = axisName("y", at);
-  const line = { color: colour, width: 1.6, dash: "10px,4px" };
-  return {
-    shapes: [{ type: "line", xref, yref, x0: 0, x1: 1, y0: layer.y, y1: layer.y, line }],
-    annotations:
-      layer.inLegend === false
-        ? []
-        : [label(layer, { xref, yref, x: 1, y: layer.y, xanchor: "right", yanchor: "bottom" })],
-  };
-}
-
-/** Labels of several marks stand at different heights, so that near ones do not cover each other. */
-function vertical(layer: VerticalLayer, at: number, colour: string, turn: number): Marks {
-  const xref = axisName("x", at);
-  const yref = `${axisName("y", at)} domain`;
-  const line = { color: colour, width: 1.4, dash: "4px,4px" };
-  const y = 1 - 0.075 * (turn % 4);
-  return {
-    shapes: [{ type: "line", xref, yref, x0: layer.x, x1: layer.x, y0: 0, y1: 1, line }],
-    annotations:
-      layer.inLegend === false
-        ? []
-        : [label(layer, { xref, yref, x: layer.x, y, xanchor: "left", yanchor: "top" })],
-  };
-}
-
-function label(layer: Layer, where: object): object {
-  return {
-    ...where,
-    text: plotText(layer.name, 34, 2),
-    showarrow: false,
-    font: { size: 12, color: look.ink },
-    bgcolor: "rgba(255,254,251,0.82)",
-    borderpad: 1,
-    align: "left",
-  };
-}
-
-/** The arrow and its words apart: drawn as one, the words would cover a short arrow. */
-function arrow(layer: ArrowLayer, at: number, colour: string): object[] {
-  const [ax, ay] = tails[layer.towards];
-  const where = { xref: axisName("x", at), yref: axisName("y", at), x: layer.x, y: layer.y };
-  const head = {
-    ...where,
-    ax,
-    ay,
-    showarrow: true,
-    arrowhead: 2,
-    arrowsize: 1.2,
-    arrowwidth: 2.2,
-    arrowcolor: colour,
-  };
-  if (layer.inLegend === false) return [head];
-  const xanchor = layer.towards === "left" ? "left" : "right";
-  return [
-    head,
-    label(layer, { ...where, xanchor, yanchor: "top", yshift: layer.towards === "up" ? -38 : -5 }),
-  ];
-}
-
-/** Pixels from an arrow's head to its tail. */
-const tails = { left: [36, 0], right: [-36, 0], up: [0, 36], down: [0, -36] } as const;
 
 function panelHeading(panel: Panel, at: number, place: PanelPlace): object[] {
   if (panel.title === "") return [];
