@@ -1,7 +1,12 @@
 export { compileRule, interpretRule } from "./code/compile-rule.js";
 export type { CompiledRule } from "./compiled-rule.js";
+export { encloseStep, type HeldValues, type StepEnclosure } from "./enclose-step.js";
+export { explainFailure, type StepFailure, type StepPlace } from "./explain-failure.js";
 export type { RuleFunction } from "./functions.js";
+export type { Interval } from "./graph/interval.js";
+export { inputReach, readsPeriod } from "./input-reach.js";
 export { linearInConstants } from "./linear-in-constants.js";
+export { quantitiesAt } from "./quantities-at.js";
 export { recurrence } from "./recurrence.js";
 export type { RecurrenceOptions } from "./recurrence-options.js";
 export type { ProcessNoise, Rule } from "./rule.js";

@@ -1,5 +1,4 @@
-import { ModelError } from "../numeric/index.js";
-import { nearestNames } from "./nearest-names.js";
+import { ModelError, nearestNames } from "../numeric/index.js";
 import type { Span } from "./syntax/token.js";
 
 /** The line of the text that holds the place, with a caret under each of its letters. */

@@ -1,5 +1,4 @@
-import type { Warning } from "../../numeric/index.js";
-import { editDistance } from "../nearest-names.js";
+import { editDistance, type Warning } from "../../numeric/index.js";
 import { refuse } from "../refusals.js";
 import type { Statement } from "../syntax/expression.js";
 import { checkRightSide } from "./check-expression.js";

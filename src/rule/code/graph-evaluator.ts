@@ -1,3 +1,4 @@
+import { graphOrder } from "../graph/graph-order.js";
 import type { Node } from "../graph/node.js";
 import { operations } from "../graph/operations.js";
 
@@ -21,15 +22,8 @@ export type ReadNode = (node: Node) => number;
 
 /** Works out nodes one after the other; the same operations in the same order as the generated code. */
 export function graphEvaluator(roots: readonly Node[]): (place: Place) => ReadNode {
-  const ordered: Node[] = [];
-  const position = new Map<Node, number>();
-  const visit = (node: Node): void => {
-    if (position.has(node)) return;
-    if (node.kind === "inner") node.inside.forEach(visit);
-    position.set(node, ordered.length);
-    ordered.push(node);
-  };
-  roots.forEach(visit);
+  const ordered = graphOrder(roots);
+  const position = new Map(ordered.map((node, index) => [node, index]));
   const tape = new Float64Array(ordered.length);
   const read: ReadNode = (node) => tape[position.get(node)!]!;
   return (place) => {

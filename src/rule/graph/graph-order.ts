@@ -1,0 +1,13 @@
+import type { Node } from "./node.js";
+
+/** The roots and all below them, arguments before what uses them. */
+export function graphOrder(roots: readonly Node[]): readonly Node[] {
+  const ordered = new Set<Node>();
+  const visit = (node: Node): void => {
+    if (ordered.has(node)) return;
+    if (node.kind === "inner") node.inside.forEach(visit);
+    ordered.add(node);
+  };
+  roots.forEach(visit);
+  return [...ordered];
+}

@@ -1,0 +1,40 @@
+/** All numbers from low to high; NaN in both when an operation has no value anywhere in it. */
+export type Interval = readonly [low: number, high: number];
+
+export const nowhere: Interval = [Number.NaN, Number.NaN];
+export const everywhere: Interval = [Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY];
+
+/** Widens by a few units in the last place, so that rounding never loses a value. */
+export const outward = (low: number, high: number): Interval => [
+  low - Math.abs(low) * 4 * Number.EPSILON - Number.MIN_VALUE,
+  high + Math.abs(high) * 4 * Number.EPSILON + Number.MIN_VALUE,
+];
+
+/** Products of infinite ends with zero are zero: the factor zero is exact. */
+const product = (a: number, b: number): number => (a === 0 || b === 0 ? 0 : a * b);
+
+export function times([a, b]: Interval, [c, d]: Interval): Interval {
+  const all = [product(a, c), product(a, d), product(b, c), product(b, d)];
+  return outward(Math.min(...all), Math.max(...all));
+}
+
+export function over(above: Interval, [c, d]: Interval): Interval {
+  if (c === 0 && d === 0) return nowhere;
+  if (c < 0 && d > 0) return everywhere;
+  const ends: Interval = [
+    d === 0 ? Number.NEGATIVE_INFINITY : 1 / d,
+    c === 0 ? Number.POSITIVE_INFINITY : 1 / c,
+  ];
+  return times(above, ends);
+}
+
+export const plus = ([a, b]: Interval, [c, d]: Interval): Interval => outward(a + c, b + d);
+export const minus = ([a, b]: Interval, [c, d]: Interval): Interval => outward(a - d, b - c);
+export const hull = ([a, b]: Interval, [c, d]: Interval): Interval => {
+  if (Number.isNaN(a)) return [c, d];
+  return Number.isNaN(c) ? [a, b] : [Math.min(a, c), Math.max(b, d)];
+};
+export const contains = ([low, high]: Interval, value: number): boolean => low <= value && value <= high;
+
+/** Image under a function that never falls. */
+export const rising = (of: (x: number) => number, [a, b]: Interval): Interval => outward(of(a), of(b));

@@ -1,0 +1,14 @@
+import { graphEvaluator } from "./code/graph-evaluator.js";
+import type { StepPlace } from "./explain-failure.js";
+import type { Rule } from "./rule.js";
+import { ruleDefinition } from "./rule-definition.js";
+
+/** A function that gives the rule's quantities, in order, in the step from a place. */
+export function quantitiesAt(rule: Rule): (place: StepPlace) => readonly number[] {
+  const { quantities } = ruleDefinition(rule).graph;
+  const evaluate = graphEvaluator(quantities);
+  return (place) => {
+    const read = evaluate(place);
+    return quantities.map(read);
+  };
+}
