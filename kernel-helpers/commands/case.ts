@@ -1,3 +1,4 @@
+import { libraryAgain, warmPictures } from "../figures/index.js";
 import { escapeHtml, look, showing, typeface } from "../tables/index.js";
 import { type CaseHead, caseLog, defaultSeed } from "./case-log.js";
 import { cautionOf, type Domain, domainCautions } from "./cautions.js";
@@ -29,6 +30,8 @@ export function openCase(options: CaseOptions): void {
   if (!known.includes(options.domain)) throw refuseUnknownDomain(options.domain, known);
   const head: CaseHead = { ...options, seed: options.seed ?? defaultSeed };
   caseLog.open(head);
+  libraryAgain();
+  warmPictures();
   const under = [
     `Field: ${options.domain}`,
     `seed ${head.seed}`,
