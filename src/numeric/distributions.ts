@@ -18,20 +18,20 @@ export function normalCdf(value: number): number {
 }
 
 /**
- * Standard normal quantile; polished against the distribution function in the far tails, where the direct
- * formula loses digits.
+ * Standard normal quantile. In the far lower tail, where the direct formula loses its digits, it is solved from
+ * the distribution function.
  * @example normalQuantile(0.975); // 1.959963984540054
  */
 export function normalQuantile(probability: number): number {
-  const first = normalInverse(probability, 0, 1);
-  if (probability > 1e-10 || !Number.isFinite(first)) return first;
-  let value = first;
-  // Newton's iteration on the logarithm of the probability, whose slope in the tail is far from 0.
-  for (let k = 0; k < 4; k++) {
+  if (!(probability > 0 && probability < 1e-10)) return normalInverse(probability, 0, 1);
+  // The tail is nearly density(z)/z; then Newton's iteration on the logarithm, which is nearly a parabola.
+  const depth = -2 * Math.log(probability);
+  let value = -Math.sqrt(depth - Math.log(2 * Math.PI * depth));
+  for (let k = 0; k < 6; k++) {
     const reached = normalCdf(value);
     value -= (Math.log(reached / probability) * reached) / normalDensity(value);
   }
-  return Number.isFinite(value) ? value : first;
+  return value;
 }
 
 /** Probability that a Student t value with the degrees of freedom is at most `value`. */
