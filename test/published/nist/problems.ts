@@ -1,4 +1,5 @@
 import { readFileSync } from "node:fs";
+import { join } from "node:path";
 import { models } from "./models.js";
 
 /** A problem of the collection, as the fixture holds it. */
@@ -12,7 +13,7 @@ export interface Problem {
   readonly predictors: readonly (readonly number[])[];
 }
 
-const file = new URL("../fixtures/nist/nonlinear-regression.json", import.meta.url);
+const file = join(__dirname, "../fixtures/nist/nonlinear-regression.json");
 export const problems: readonly Problem[] = JSON.parse(readFileSync(file, "utf8"));
 
 /** Residuals of a problem at constants b, in units of 1/`scale` of the data's. */
