@@ -26,7 +26,7 @@ export interface PanelPlaces {
   readonly legend: number;
 }
 
-const letter = 7.4;
+const letter = 7.8;
 const narrow = 560;
 
 /** Lays panels out in one column on a narrow screen, else in two (three when there are many). */
@@ -55,7 +55,7 @@ export function panelPlaces(
     return {
       x: [start / plotWidth, (start + panelWidth) / plotWidth] as const,
       y: [1 - (above + each) / plotHeight, 1 - above / plotHeight] as const,
-      columns: Math.floor((panelWidth + gapX / 2) / letter),
+      columns: Math.floor((panelWidth + 20) / letter),
       rows: Math.floor(each / letter),
       labels: labels[at] ?? 40,
     };

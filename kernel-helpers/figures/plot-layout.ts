@@ -17,7 +17,7 @@ export function plotLayout(
 ): PlotLayout {
   const places = panelPlaces(figure.panels, width, still ? titleHeight(figure.title, width) : 0, data);
   const each = figure.panels.map((panel, at) => ({ panel, at, place: places.panels[at] as PanelPlace }));
-  const marks = each.map(({ panel, at }) => panelMarks(panel, at));
+  const marks = each.map(({ panel, at, place }) => panelMarks(panel, at, place));
   return {
     width,
     height: places.height,

@@ -2,6 +2,7 @@ import { look } from "../tables/index.js";
 import type { Panel } from "./figure.js";
 import type { ArrowLayer, Layer, ThresholdLayer, VerticalLayer } from "./layer.js";
 import { seriesStyle } from "./palette.js";
+import type { PanelPlace } from "./panel-places.js";
 import { plotText } from "./plot-text.js";
 import { axisName } from "./plot-traces.js";
 
@@ -12,13 +13,14 @@ export interface Marks {
 }
 
 /** Thresholds, upright marks and arrows of a panel. */
-export function panelMarks(panel: Panel, at: number): Marks {
+export function panelMarks(panel: Panel, at: number, place: PanelPlace): Marks {
+  const room = Math.max(14, Math.min(34, Math.floor(place.columns * 0.6)));
   let upright = 0;
   const marks = panel.layers.map((layer, turn): Marks => {
     const { colour } = seriesStyle(layer.style ?? turn);
-    if (layer.mark === "threshold") return threshold(layer, at, colour);
-    if (layer.mark === "vertical") return vertical(layer, at, colour, upright++);
-    if (layer.mark === "arrow") return { shapes: [], annotations: arrow(layer, at, colour) };
+    if (layer.mark === "threshold") return threshold(layer, at, colour, room);
+    if (layer.mark === "vertical") return vertical(layer, at, colour, upright++, room);
+    if (layer.mark === "arrow") return { shapes: [], annotations: arrow(layer, at, colour, room) };
     return { shapes: [], annotations: [] };
   });
   return {
@@ -27,7 +29,7 @@ export function panelMarks(panel: Panel, at: number): Marks {
   };
 }
 
-function threshold(layer: ThresholdLayer, at: number, colour: string): Marks {
+function threshold(layer: ThresholdLayer, at: number, colour: string, room: number): Marks {
   const xref = `${axisName("x", at)} domain`;
   const yref = axisName("y", at);
   const line = { color: colour, width: 1.6, dash: "10px,4px" };
@@ -36,12 +38,12 @@ function threshold(layer: ThresholdLayer, at: number, colour: string): Marks {
     annotations:
       layer.inLegend === false
         ? []
-        : [label(layer, { xref, yref, x: 1, y: layer.y, xanchor: "right", yanchor: "bottom" })],
+        : [label(layer, room, { xref, yref, x: 1, y: layer.y, xanchor: "right", yanchor: "bottom" })],
   };
 }
 
 /** Labels of several marks stand at different heights, so that near ones do not cover each other. */
-function vertical(layer: VerticalLayer, at: number, colour: string, turn: number): Marks {
+function vertical(layer: VerticalLayer, at: number, colour: string, turn: number, room: number): Marks {
   const xref = axisName("x", at);
   const yref = `${axisName("y", at)} domain`;
   const line = { color: colour, width: 1.4, dash: "4px,4px" };
@@ -51,14 +53,14 @@ function vertical(layer: VerticalLayer, at: number, colour: string, turn: number
     annotations:
       layer.inLegend === false
         ? []
-        : [label(layer, { xref, yref, x: layer.x, y, xanchor: "left", yanchor: "top" })],
+        : [label(layer, room, { xref, yref, x: layer.x, y, xanchor: "left", yanchor: "top" })],
   };
 }
 
-function label(layer: Layer, where: object): object {
+function label(layer: Layer, room: number, where: object): object {
   return {
     ...where,
-    text: plotText(layer.name, 34, 2),
+    text: plotText(layer.name, room, 2),
     showarrow: false,
     font: { size: 12, color: look.ink },
     bgcolor: "rgba(255,254,251,0.82)",
@@ -68,7 +70,7 @@ function label(layer: Layer, where: object): object {
 }
 
 /** The arrow and its words apart: drawn as one, the words would cover a short arrow. */
-function arrow(layer: ArrowLayer, at: number, colour: string): object[] {
+function arrow(layer: ArrowLayer, at: number, colour: string, room: number): object[] {
   const [ax, ay] = tails[layer.towards];
   const where = { xref: axisName("x", at), yref: axisName("y", at), x: layer.x, y: layer.y };
   const head = {
@@ -85,7 +87,7 @@ function arrow(layer: ArrowLayer, at: number, colour: string): object[] {
   const xanchor = layer.towards === "left" ? "left" : "right";
   return [
     head,
-    label(layer, { ...where, xanchor, yanchor: "top", yshift: layer.towards === "up" ? -38 : -5 }),
+    label(layer, room, { ...where, xanchor, yanchor: "top", yshift: layer.towards === "up" ? -38 : -5 }),
   ];
 }
 

@@ -1,4 +1,4 @@
-import { escapeHtml, oneLine } from "../tables/index.js";
+import { oneLine } from "../tables/index.js";
 
 /**
  * Text for a plot's labels, which read a little HTML: shown as it is, broken into lines at words.
@@ -7,7 +7,12 @@ import { escapeHtml, oneLine } from "../tables/index.js";
  * @param lines - lines at most; what is left is replaced by an ellipsis.
  */
 export function plotText(text: string, columns: number, lines: number = 2): string {
-  return brokenLines(oneLine(text), columns, lines).map(escapeHtml).join("<br>");
+  return brokenLines(oneLine(text), columns, lines).map(plotEscaped).join("<br>");
+}
+
+/** What a plot's labels read as markup, as a sign to typeset between, or as the beginning of a named sign. */
+function plotEscaped(text: string): string {
+  return text.replace(/[&<>$]/g, (sign) => `&#${sign.codePointAt(0)};`);
 }
 
 function brokenLines(text: string, columns: number, lines: number): string[] {

@@ -22,8 +22,8 @@ export function tableHtml(table: Table): string {
     .map(({ mark, text }) => `<p dir="auto">${mark === "" ? "" : `<b>${mark}</b> `}${escapeHtml(text)}</p>`)
     .join("");
   return [
-    `<div class="pw-table">${tableStyle}<div class="pw-scroll"><table>`,
-    `<caption dir="auto">${escapeHtml(table.title)}</caption>`,
+    `<div class="pw-table">${tableStyle}<p class="pw-title" dir="auto">${escapeHtml(table.title)}</p>`,
+    `<div class="pw-scroll"><table aria-label="${escapeHtml(table.title)}">`,
     `<thead>${head}</thead><tbody>${rows.join("")}</tbody>${foot === "" ? "" : `<tfoot>${foot}</tfoot>`}`,
     `</table></div>${notes === "" ? "" : `<div class="pw-notes">${notes}</div>`}${copyButton(table)}</div>`,
   ].join("");
@@ -60,8 +60,8 @@ const tableStyle: string = `<style>
 ${box}{margin:.8em 0 1em;color:${look.ink};font-family:${typeface};font-size:14px;line-height:1.4;max-width:100%}
 ${box} .pw-scroll{overflow-x:auto;max-width:100%}
 ${box} table{border-collapse:collapse;border:0;border-top:3px solid ${look.accent};background:${look.paper};margin:0;font-size:14px;width:auto;table-layout:auto}
-${box} caption{caption-side:top;text-align:left;font-weight:600;font-size:15px;color:${look.ink};padding:0 0 .4em;overflow-wrap:anywhere}
-${box} th,${box} td{border:0;border-bottom:1px solid ${look.line};padding:.32em .8em;vertical-align:baseline;max-width:28em;overflow-wrap:break-word;background:none;color:${look.ink};white-space:normal}
+${box} .pw-title{font-weight:600;font-size:15px;margin:0 0 .35em;overflow-wrap:anywhere}
+${box} th,${box} td{border:0;border-bottom:1px solid ${look.line};padding:.32em .8em;vertical-align:baseline;max-width:min(28em,60vw);overflow-wrap:break-word;background:none;color:${look.ink};white-space:normal}
 ${box} thead th{font-weight:600;color:${look.quiet};background:${look.shade};vertical-align:bottom;min-width:3.5em}
 ${box} .pw-n{text-align:right;font-variant-numeric:tabular-nums;white-space:nowrap}
 ${box} thead .pw-n{white-space:normal}
@@ -72,5 +72,5 @@ ${box} .pw-gap{text-align:center;color:${look.quiet}}
 ${box} .pw-notes{color:${look.quiet};font-size:13px;margin:.4em 0 0}
 ${box} .pw-notes p{margin:.15em 0;overflow-wrap:anywhere}
 ${box} .pw-copy{font:inherit;font-size:12px;color:${look.accent};background:${look.paper};border:1px solid ${look.line};border-radius:3px;padding:.1em .7em;margin:.4em 0 0;cursor:pointer}
-@media print{${box} .pw-copy{display:none}${box} tr{break-inside:avoid}${box} .pw-scroll{overflow:visible}}
+@media print{${box} .pw-copy{display:none}${box} tr{break-inside:avoid}${box} .pw-scroll{overflow:visible}${box} table{font-size:8.5pt}${box} th,${box} td{padding:.2em .45em}}
 </style>`;

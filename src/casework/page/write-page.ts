@@ -1,0 +1,72 @@
+import { type CaseHead, caseHead, opensCase } from "./case-head.js";
+import { escapeText } from "./escape-text.js";
+import { figureLibrary } from "./figure-library.js";
+import { markdownHtml } from "./markdown-html.js";
+import { outputsHtml } from "./output-html.js";
+import { pageStyle } from "./page-style.js";
+import { joined, type ShownCell, type ShownNotebook } from "./shown-notebook.js";
+
+/** What a page says beside its notebook. */
+export interface PageOptions {
+  /** Title when the notebook opens no case and has no heading. Default "Case". */
+  readonly title?: string;
+  /** Printed at the end: the notebook's file name, say. */
+  readonly source?: string;
+}
+
+/** Nothing is fetched, whatever an output asks for; figures need their own scripts and pictures as data. */
+const policy =
+  "default-src 'none'; style-src 'unsafe-inline'; script-src 'unsafe-inline'; img-src data: blob:; font-src data:";
+
+/**
+ * An executed notebook as one HTML file that needs nothing else: title and question first, then the answer, then
+ * the notebook with its code folded away. Figures are live on a screen and pictures on paper.
+ *
+ * @param notebook - nbformat 4.5, with outputs; it is not changed.
+ * @returns the same text for the same notebook.
+ * @example writePage({ cells: [{ cell_type: "markdown", source: "# Ferry loan" }] });
+ */
+export function writePage(notebook: ShownNotebook, options: PageOptions = {}): string {
+  const head = caseHead(notebook);
+  const title = head.title ?? options.title ?? "Case";
+  const body = notebook.cells.map((cell) => cellHtml(cell, title)).join("\n");
+  return [
+    '<!doctype html>\n<html lang="en"><head><meta charset="utf-8">',
+    `<meta http-equiv="Content-Security-Policy" content="${policy}">`,
+    '<meta name="viewport" content="width=device-width,initial-scale=1">',
+    `<title>${escapeText(title)}</title><style>${pageStyle}</style></head><body><main>`,
+    headHtml(head, title),
+    body,
+    options.source ? `<footer>Written from ${escapeText(options.source)}.</footer>` : "",
+    `</main>${body.includes('class="pw-figure') ? figureLibrary() : ""}</body></html>\n`,
+  ].join("\n");
+}
+
+function headHtml({ question, about, answers }: CaseHead, title: string): string {
+  const said = answers.map((sentence) => `<p dir="auto">${escapeText(sentence)}</p>`).join("");
+  return [
+    `<header><h1 dir="auto">${escapeText(title)}</h1>`,
+    question ? `<p class="question" dir="auto">${escapeText(question)}</p>` : "",
+    about ? `<p class="about" dir="auto">${escapeText(about)}</p>` : "",
+    said ? `<section class="answer" aria-label="Answer"><b>Answer</b>${said}</section>` : "",
+    "</header>",
+  ].join("");
+}
+
+function cellHtml(cell: ShownCell, title: string): string {
+  const source = joined(cell.source);
+  if (cell.cell_type === "markdown") return markdownHtml(withoutTitle(source, title), cell.attachments);
+  if (cell.cell_type !== "code") return `<pre>${escapeText(source)}</pre>`;
+  const step = cell.execution_count ? ` of step ${cell.execution_count}` : "";
+  const code =
+    source.trim() === ""
+      ? ""
+      : `<details class="code"><summary>Code${step}</summary><pre>${escapeText(source)}</pre></details>`;
+  return code + outputsHtml((cell.outputs ?? []).filter((output) => !opensCase(output)));
+}
+
+/** The heading that gave the page its title is not said twice. */
+function withoutTitle(source: string, title: string): string {
+  const heading = /^#\s+(.+)\n*/.exec(source);
+  return heading?.[1]?.replace(/[*_`]/g, "") === title ? source.slice(heading[0].length) : source;
+}
