@@ -1,5 +1,5 @@
 import { graphOrder } from "./graph/graph-order.js";
-import type { Interval } from "./graph/interval.js";
+import { type Interval, plus } from "./graph/interval.js";
 import { intervalOperations } from "./graph/interval-operations.js";
 import type { Node } from "./graph/node.js";
 import { stepDerivatives } from "./graph/step-derivatives.js";
@@ -19,33 +19,37 @@ export interface HeldValues {
 }
 
 /**
- * For a rule of one state without lags: a function that encloses the next value and its slope over an interval.
- * Every value that the step takes on the interval lies within `value`, and every slope within `slope`.
+ * For a rule of one state: a function that encloses the next value and its slope over an interval, past values
+ * being the same as the present one. Every value that the step takes on the interval lies within `value`, and
+ * every slope within `slope`.
  */
 export function encloseStep(rule: Rule, held: HeldValues): (present: Interval) => StepEnclosure {
   const { graph } = ruleDefinition(rule);
-  const roots: readonly Node[] = [graph.next[0]!, stepDerivatives(graph).byState[0]![0]!];
-  const ordered = graphOrder(roots);
+  const next = graph.next[0]!;
+  const slopes = stepDerivatives(graph).byState[0]!;
+  const ordered = graphOrder([next, ...slopes]);
   const place = new Map(ordered.map((node, index) => [node, index]));
-  const tape: Interval[] = new Array(ordered.length);
-  const leaf = (node: Extract<Node, { kind: "leaf" }>, present: Interval): Interval => {
-    if (node.role === "state") return present;
-    const values = node.role === "constant" ? held.constants : held.inputs;
-    const value = node.role === "period" ? Number.NaN : values[node.slot]!;
-    return [value, value];
-  };
   const insides = ordered.map((node) =>
     node.kind === "inner" ? node.inside.map((part) => place.get(part)!) : [],
   );
+  const tape: Interval[] = new Array(ordered.length);
+  const read = (node: Node): Interval => tape[place.get(node)!]!;
   return (present) => {
     ordered.forEach((node, index) => {
       if (node.kind === "number") tape[index] = [node.value, node.value];
-      else if (node.kind === "leaf") tape[index] = leaf(node, present);
+      else if (node.kind === "leaf") tape[index] = leafInterval(node, held, present);
       else {
         const [a = 0, b = a, c = a] = insides[index]!;
         tape[index] = intervalOperations[node.operator](tape[a]!, tape[b]!, tape[c]!);
       }
     });
-    return { value: tape[place.get(roots[0]!)!]!, slope: tape[place.get(roots[1]!)!]! };
+    return { value: read(next), slope: slopes.map(read).reduce(plus) };
   };
+}
+
+function leafInterval(node: Extract<Node, { kind: "leaf" }>, held: HeldValues, present: Interval): Interval {
+  if (node.role === "state") return present;
+  const values = node.role === "constant" ? held.constants : held.inputs;
+  const value = node.role === "period" ? Number.NaN : values[node.slot]!;
+  return [value, value];
 }

@@ -6,8 +6,8 @@ export const everywhere: Interval = [Number.NEGATIVE_INFINITY, Number.POSITIVE_I
 
 /** Widens by a few units in the last place, so that rounding never loses a value. */
 export const outward = (low: number, high: number): Interval => [
-  low - Math.abs(low) * 4 * Number.EPSILON - Number.MIN_VALUE,
-  high + Math.abs(high) * 4 * Number.EPSILON + Number.MIN_VALUE,
+  Number.isFinite(low) ? low - Math.abs(low) * 4 * Number.EPSILON - Number.MIN_VALUE : low,
+  Number.isFinite(high) ? high + Math.abs(high) * 4 * Number.EPSILON + Number.MIN_VALUE : high,
 ];
 
 /** Products of infinite ends with zero are zero: the factor zero is exact. */

@@ -1,0 +1,127 @@
+import { encloseStep, type Interval, type Rule } from "../rule/index.js";
+import { enclosedRoots } from "./enclosed-roots.js";
+import { type HeldSetting, type HeldStep, holdStep, settled } from "./held-step.js";
+import { type Multiplier, multipliersOf } from "./multiplier.js";
+import { type SearchRange, searchRanges } from "./search-range.js";
+import { settleByNewton } from "./settle-by-newton.js";
+import { spreadPoints } from "./spread-points.js";
+import { type Stability, stabilityOf } from "./stability.js";
+
+/** Values that the rule leaves as they are. */
+export interface Equilibrium extends Stability {
+  /** By state. */
+  readonly at: Readonly<Record<string, number>>;
+  /** Largest |next - present| over the states, in the unit of the state. */
+  readonly residual: number;
+  /** Of the linearised step, largest modulus first; one for a single state without lags. */
+  readonly multipliers: readonly Multiplier[];
+  /** A whole sentence. */
+  readonly sentence: string;
+}
+
+/** All equilibria found in a range. */
+export interface Equilibria {
+  readonly kind: "equilibria";
+  readonly rule: Rule;
+  readonly constants: Readonly<Record<string, number>>;
+  /** By state: the range searched. */
+  readonly within: Readonly<Record<string, Interval>>;
+  readonly points: readonly Equilibrium[];
+  /**
+   * `every` = one state: the range was covered and none can be missing; `many-starts` = a system: none may be
+   * missing, but none is proven to be; `cut-short` = the search ran out of patience.
+   */
+  readonly search: "every" | "many-starts" | "cut-short";
+  /** Starts used, for a system. */
+  readonly starts: number;
+}
+
+export interface EquilibriaOptions extends HeldSetting {
+  /** Default: the rule's bounds, else a million times the largest constant either way. */
+  readonly within?: SearchRange;
+  /** For systems: how many places the search starts from. Default 400. */
+  readonly starts?: number;
+}
+
+const shown = (value: number): string => String(Number(value.toPrecision(6)));
+
+function described(held: HeldStep, present: ArrayLike<number>): Equilibrium {
+  const { rule, width } = held;
+  const state = settled(rule, present);
+  const { next, matrix } = held.slopes(state);
+  const multipliers = multipliersOf(matrix, width);
+  const stability = stabilityOf(multipliers);
+  const residual = state.reduce((most, value, i) => Math.max(most, Math.abs(next[i]! - value)), 0);
+  const names = rule.states.map((name, i) => {
+    const unit = rule.units[name] ?? "";
+    return `${name} = ${shown(state[i]!)}${unit === "" ? "" : ` ${unit}`}`;
+  });
+  return Object.freeze({
+    at: Object.freeze(Object.fromEntries(rule.states.map((name, i) => [name, state[i]!]))),
+    residual,
+    multipliers: Object.freeze(multipliers),
+    ...stability,
+    sentence: `The equilibrium ${names.join(", ")} ${stability.words}.`,
+  });
+}
+
+function ofOneState(held: HeldStep, within: Interval): { points: Float64Array[]; complete: boolean } {
+  const enclosure = encloseStep(held.rule, held);
+  const next = new Float64Array(held.width);
+  const { roots, complete } = enclosedRoots({
+    of: (x) => {
+      held.step(settled(held.rule, [x]), next);
+      return next[0]! - x;
+    },
+    enclose: (x) => {
+      const { value, slope } = enclosure(x);
+      return { value: [value[0] - x[1], value[1] - x[0]], slope: [slope[0] - 1, slope[1] - 1] };
+    },
+    within,
+  });
+  return { points: roots.map((at) => Float64Array.of(at)), complete };
+}
+
+const apart = (a: Float64Array, b: Float64Array): boolean =>
+  a.some((value, i) => Math.abs(value - b[i]!) > 1e-8 * Math.max(Math.abs(value), Math.abs(b[i]!), 1e-12));
+
+function ofSystem(held: HeldStep, within: readonly Interval[], starts: number): readonly Float64Array[] {
+  const found: Float64Array[] = [];
+  for (const start of spreadPoints(within, starts)) {
+    const point = settleByNewton(held, start);
+    const inside = point?.every((value, i) => value >= within[i]![0] && value <= within[i]![1]);
+    if (point !== undefined && inside && found.every((other) => apart(point, other))) found.push(point);
+  }
+  return found.sort((a, b) => a[0]! - b[0]! || a[1]! - b[1]!);
+}
+
+/**
+ * Finds the values that a rule leaves as they are, and says of each whether it is stable.
+ *
+ * One state: every equilibrium in the range, by a search over intervals that cannot lose a sign change; places
+ * where the step only touches the line of no change are found to rounding. Systems: Newton's method from many
+ * starts. A multiplier is a root of the linearised step; all of modulus below 1 means stable.
+ *
+ * @param options.inputs - by input, the value at which it is held.
+ * @throws {ModelError} `missing-value` | `unknown-name` | `rule-changes-with-time` | `unreadable-option`.
+ * @example equilibria(recurrence("ΔN = r*N*(1 - N/K)"), { constants: { r: 0.5, K: 1000 } }).points[1].at.N; // 1000
+ */
+export function equilibria(rule: Rule, options: EquilibriaOptions = {}): Equilibria {
+  const held = holdStep(rule, options, "equilibrium");
+  const ranges = searchRanges(rule, held.constants, options.within);
+  const single = rule.states.length === 1;
+  const starts = single ? 0 : (options.starts ?? 400);
+  const found = single
+    ? ofOneState(held, ranges[0]!)
+    : { points: ofSystem(held, ranges, starts), complete: true };
+  const search = single ? "every" : "many-starts";
+  return Object.freeze({
+    kind: "equilibria",
+    rule,
+    constants: Object.freeze(Object.fromEntries(rule.constants.map((name, i) => [name, held.constants[i]!]))),
+    within: Object.freeze(Object.fromEntries(rule.states.map((name, i) => [name, ranges[i]!]))),
+    points: Object.freeze(found.points.map((point) => described(held, point))),
+    search: found.complete ? search : "cut-short",
+    starts,
+  });
+}

@@ -1,0 +1,113 @@
+import { compileRule, explainFailure, quantitiesAt, type Rule, type StepPlace } from "../rule/index.js";
+import { type InputValues, inputColumns } from "./input-columns.js";
+import { unreadableOption } from "./refusals.js";
+import { constantsBySlot, type InitialValues, initialVector } from "./setting.js";
+
+export interface PathOptions {
+  /** By constant; those the rule holds fixed may be left out. */
+  readonly constants?: Readonly<Record<string, number>>;
+  /** By state; those the rule states may be left out. */
+  readonly initial?: InitialValues;
+  readonly periods: number;
+  /** By input: values by absolute period. */
+  readonly inputs?: InputValues;
+  /** Absolute period of the first value; default 0. */
+  readonly from?: number;
+}
+
+/** Why a path ends where it does. */
+export type PathStop =
+  | { readonly kind: "complete" }
+  /** The step into this absolute period has no finite value; the path ends one period before. */
+  | { readonly kind: "left-finite-range"; readonly period: number; readonly reason: string };
+
+/** One path of a rule. */
+export interface Path {
+  readonly kind: "path";
+  readonly rule: Rule;
+  readonly constants: Readonly<Record<string, number>>;
+  readonly from: number;
+  /** Periods that have a value, not counting the first. */
+  readonly periods: number;
+  /** By state: [periods + 1]. */
+  readonly values: Readonly<Record<string, Float64Array>>;
+  /** By quantity: [periods + 1]; the value inside the period that ends at that row, NaN in row 0. */
+  readonly quantities: Readonly<Record<string, Float64Array>>;
+  readonly stop: PathStop;
+}
+
+/** Everything a run needs, by slot. */
+interface Run {
+  readonly rule: Rule;
+  readonly constants: Float64Array;
+  readonly inputs: readonly Float64Array[];
+  readonly from: number;
+  readonly width: number;
+  /** [periods + 1, width] */
+  readonly table: Float64Array;
+}
+
+function placeAt(run: Run, row: number): StepPlace {
+  const state = run.table.subarray(row * run.width, (row + 1) * run.width);
+  return { state, constants: run.constants, inputs: run.inputs, t: run.from + row };
+}
+
+function stopOf(run: Run, periods: number): { readonly rows: number; readonly stop: PathStop } {
+  const bad = run.table.findIndex((value) => !Number.isFinite(value));
+  if (bad < 0) return { rows: periods + 1, stop: { kind: "complete" } };
+  const rows = Math.floor(bad / run.width);
+  const period = run.from + rows;
+  const failure = explainFailure(run.rule, placeAt(run, rows - 1));
+  const cause = failure === undefined ? "" : `: ${failure.reason}`;
+  const reason = `The rule leaves the finite range at period ${period}${cause}.`;
+  return { rows, stop: { kind: "left-finite-range", period, reason } };
+}
+
+function quantityColumns(run: Run, rows: number): Readonly<Record<string, Float64Array>> {
+  const { quantities } = run.rule;
+  const columns = quantities.map(() => new Float64Array(rows).fill(Number.NaN));
+  const at = quantitiesAt(run.rule);
+  for (let row = 1; row < rows && quantities.length > 0; row++) {
+    at(placeAt(run, row - 1)).forEach((value, k) => {
+      columns[k]![row] = value;
+    });
+  }
+  return Object.freeze(Object.fromEntries(quantities.map((name, k) => [name, columns[k]!])));
+}
+
+/**
+ * Runs a rule from its first value, without random change.
+ *
+ * @param rule - any rule; one with lags needs as many first values as it reads, oldest first.
+ * @param options.periods - steps to take, a whole number from 0.
+ * @returns the values by state [periods + 1], and why the path ends; it stops before a value that is not finite.
+ * @throws {ModelError} `missing-value` | `unknown-name` | `wrong-history` | `missing-input` | `unreadable-option`.
+ * @example path(recurrence("N[t+1] = R*N"), { constants: { R: 2 }, initial: { N: 3 }, periods: 2 }).values.N; // 3, 6, 12
+ */
+export function path(rule: Rule, options: PathOptions): Path {
+  const { periods, from = 0 } = options;
+  if (!Number.isSafeInteger(periods) || periods < 0) {
+    throw unreadableOption("periods", "a whole number from 0 on", periods);
+  }
+  if (!Number.isSafeInteger(from)) throw unreadableOption("from", "a whole number", from);
+  const constants = constantsBySlot(rule, options.constants);
+  const initial = initialVector(rule, options.initial);
+  const inputs = inputColumns(rule, options.inputs, from, periods);
+  const width = initial.length;
+  const table = new Float64Array((periods + 1) * width);
+  compileRule(rule).path(initial, constants, inputs, from, periods, table);
+  const run: Run = { rule, constants, inputs, from, width, table };
+  const { rows, stop } = stopOf(run, periods);
+  const column = (slot: number): Float64Array =>
+    Float64Array.from({ length: rows }, (_, row) => table[row * width + slot]!);
+  return Object.freeze({
+    kind: "path",
+    rule,
+    constants: Object.freeze(Object.fromEntries(rule.constants.map((name, i) => [name, constants[i]!]))),
+    from,
+    periods: rows - 1,
+    values: Object.freeze(Object.fromEntries(rule.states.map((name, slot) => [name, column(slot)]))),
+    quantities: quantityColumns(run, rows),
+    stop: Object.freeze(stop),
+  });
+}

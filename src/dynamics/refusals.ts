@@ -1,0 +1,69 @@
+import { ModelError, nearestNames } from "../numeric/index.js";
+
+const list = (names: readonly string[]): string => (names.length === 0 ? "none" : names.join(", "));
+
+export function missingValue(role: string, name: string, given: readonly string[]): ModelError {
+  const near = nearestNames(name, given);
+  const hint = near.length === 0 ? "" : ` "${near[0]}" was given; is it the same?`;
+  return new ModelError(
+    "missing-value",
+    `The rule needs a value for the ${role} "${name}", and none was given. Given: ${list(given)}.${hint}`,
+    { role, name, given },
+  );
+}
+
+export function strangeName(role: string, name: string, known: readonly string[]): ModelError {
+  const near = nearestNames(name, known);
+  const hint = near.length === 0 ? "" : ` Did you mean "${near.join('" or "')}"?`;
+  return new ModelError(
+    "unknown-name",
+    `The rule has no ${role} called "${name}". It has: ${list(known)}.${hint}`,
+    { role, name, known },
+  );
+}
+
+export function notFinite(role: string, name: string, value: unknown): ModelError {
+  return new ModelError(
+    "not-a-number",
+    `The ${role} "${name}" is ${String(value)}, which is no finite number. Give a number.`,
+    { role, name, value },
+  );
+}
+
+export function wrongHistory(state: string, wanted: number, given: number): ModelError {
+  return new ModelError(
+    "wrong-history",
+    `The rule reads "${state}" up to ${wanted - 1} periods back, so it needs ${wanted} first values, oldest first; ${given} were given. Give initial: { ${state}: [ ... ] } with ${wanted} numbers.`,
+    { state, wanted, given },
+  );
+}
+
+export function missingInput(input: string, period: number, given: number): ModelError {
+  return new ModelError(
+    "missing-input",
+    `The input "${input}" is needed at period ${period}, and the values given reach from period 0 to ${given - 1}. Give values for every period of the path, or shorten it.`,
+    { input, period, given },
+  );
+}
+
+export function unreadableOption(option: string, wanted: string, given: unknown): ModelError {
+  return new ModelError("unreadable-option", `The option ${option} is ${String(given)}. Give ${wanted}.`, {
+    option,
+    given,
+  });
+}
+
+export function oneStateOnly(what: string, states: readonly string[]): ModelError {
+  return new ModelError(
+    "one-state-only",
+    `${what} is worked out for rules of one state without past values; this rule has the state vector ${states.join(", ")}. Use simulate or equilibria for systems.`,
+    { states },
+  );
+}
+
+export function changesWithTime(what: string): ModelError {
+  return new ModelError(
+    "rule-changes-with-time",
+    `The rule reads the period index t, so it has no ${what} that stays. Hold t by writing its value as a constant.`,
+  );
+}

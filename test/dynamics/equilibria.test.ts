@@ -1,0 +1,37 @@
+import { expect, test } from "vitest";
+import { equilibria } from "../../src/dynamics/index.js";
+import { recurrence } from "../../src/rule/index.js";
+
+// Source: the equation r N (1 - N/K) = H solved by the quadratic formula; values printed to 10 decimals.
+test("a catch below the largest sustainable one leaves an unstable and a stable level", () => {
+  const rule = recurrence("ΔN = r*N*(1 - N/K) - H");
+  const { points, search } = equilibria(rule, { constants: { r: 0.5, K: 1000, H: 100 } });
+  expect(search).toBe("every");
+  expect(points.map(({ at }) => at["N"])).toEqual([
+    expect.closeTo(276.39320225, 8),
+    expect.closeTo(723.60679775, 8),
+  ]);
+  expect(points.map(({ verdict }) => verdict)).toEqual(["unstable", "stable"]);
+});
+
+test("the largest sustainable catch leaves one level, where the step touches the line of no change", () => {
+  const rule = recurrence("ΔN = r*N*(1 - N/K) - H");
+  const { points } = equilibria(rule, { constants: { r: 0.5, K: 1000, H: 125 } });
+  expect(points).toHaveLength(1);
+  expect(points[0]!.at["N"]).toBeCloseTo(500, 3);
+  expect(points[0]!.boundary).toBe("fold");
+});
+
+// Source: closed form H* = lam ln lam/((lam - 1) a c), P* = ln lam / a; printed to 10 decimals.
+test("a host and its parasitoid rest at one place besides zero, which is unstable and turning", () => {
+  const rule = recurrence("H[t+1] = lam*H*exp(-a*P)\nP[t+1] = c*H*(1 - exp(-a*P))");
+  const { points } = equilibria(rule, {
+    constants: { lam: 2, a: 0.1, c: 1 },
+    within: { H: [0, 100], P: [0, 100] },
+  });
+  expect(points).toHaveLength(2);
+  expect(points[1]!.at["H"]).toBeCloseTo(13.8629436112, 9);
+  expect(points[1]!.at["P"]).toBeCloseTo(6.9314718056, 9);
+  expect(points[1]!.multipliers[0]!.modulus).toBeCloseTo(1.17741002, 8);
+  expect(points[1]!.approach).toBe("turning");
+});
