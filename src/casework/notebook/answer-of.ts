@@ -1,0 +1,17 @@
+import type { Notebook } from "./notebook.js";
+
+const answerType = "application/vnd.periodwise.answer+json";
+
+/** The sentence that the notebook gives as its answer: the last one, if it gives any. */
+export function answerOf(notebook: Notebook): string | undefined {
+  const sentences = notebook.cells
+    .flatMap((cell) => cell.outputs ?? [])
+    .map((output) => output["data"])
+    .flatMap((data) =>
+      typeof data === "object" && data !== null ? [Reflect.get(data, answerType) as unknown] : [],
+    )
+    .map((answer) =>
+      typeof answer === "object" && answer !== null ? Reflect.get(answer, "sentence") : undefined,
+    );
+  return sentences.filter((sentence) => typeof sentence === "string").at(-1);
+}

@@ -1,0 +1,37 @@
+import { existsSync } from "node:fs";
+import { createRequire } from "node:module";
+import { dirname, join } from "node:path";
+
+/** A package that every cell can import, wherever its notebook is: the kernel's own copy of it. */
+export interface OwnPackage {
+  readonly name: string;
+  /** The file that `require` gives. */
+  readonly program: string;
+  /** The declarations that cells are checked against. */
+  readonly types: string;
+}
+
+const names = ["periodwise", "danfojs-node"];
+
+/** The folder that holds this installation's package.json. */
+export function installationFolder(from: string = __dirname): string {
+  if (existsSync(join(from, "package.json"))) return from;
+  return installationFolder(dirname(from));
+}
+
+/** The packages given to every cell, as this installation has them. */
+export function ownPackages(): readonly OwnPackage[] {
+  const require = createRequire(__filename);
+  return names.flatMap((name) => {
+    const folder = folderOf(name, require);
+    if (folder === undefined) return [];
+    const { main, types } = require(join(folder, "package.json")) as { main: string; types: string };
+    return [{ name, program: join(folder, main), types: join(folder, types) }];
+  });
+}
+
+function folderOf(name: string, require: NodeJS.Require): string | undefined {
+  if (name === "periodwise") return installationFolder();
+  const places = require.resolve.paths(name) ?? [];
+  return places.map((place) => join(place, name)).find((folder) => existsSync(join(folder, "package.json")));
+}

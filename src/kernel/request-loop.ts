@@ -1,0 +1,87 @@
+import type { Message } from "./protocol/message.js";
+import { execute } from "./requests/execute.js";
+import { handlers } from "./requests/handlers.js";
+import type { KernelState } from "./requests/kernel-state.js";
+import type { FromTransport, Outlet } from "./transport/port-messages.js";
+
+export type ReplyTo = (outlet: Outlet, request: Message, type: string, content: object) => void;
+
+interface Queued {
+  readonly outlet: Outlet;
+  readonly request: Message;
+}
+
+/** Takes what the transport thread hands over. Cells run one after the other; other requests do not wait. */
+export function requestLoop(kernel: KernelState, reply: ReplyTo): (message: FromTransport) => void {
+  const queue: Queued[] = [];
+  let busy = false;
+
+  const work = async (): Promise<void> => {
+    if (busy) return;
+    busy = true;
+    for (let next = queue.shift(); next !== undefined; next = queue.shift()) {
+      const { outlet, request } = next;
+      const given = await bracketed(kernel, request, async () => {
+        const content = await execute(kernel, request);
+        const stops =
+          Reflect.get(content, "status") === "error" && request.content["stop_on_error"] !== false;
+        // What has arrived by now was queued behind the failed cell; what comes after the reply was not.
+        if (stops) await new Promise(setImmediate);
+        const aborted = stops ? queue.splice(0) : [];
+        reply(outlet, request, "execute_reply", content);
+        return aborted;
+      });
+      await abort(given ?? []);
+    }
+    busy = false;
+  };
+
+  const abort = async (given: readonly Queued[]): Promise<void> => {
+    for (const { outlet, request } of given) {
+      await bracketed(kernel, request, async () => {
+        reply(outlet, request, "execute_reply", { status: "aborted", execution_count: kernel.count });
+      });
+    }
+  };
+
+  return (message) => {
+    if (message.kind === "shutdown") process.exit(0);
+    if (message.kind === "interrupt") kernel.interrupts.heard(message.count);
+    if (message.kind === "input") kernel.questions.answer(message.message);
+    if (message.kind !== "request") return;
+    const { outlet, message: request } = message;
+    if (request.header.msg_type === "execute_request") {
+      queue.push({ outlet, request });
+      void work();
+    } else void handle(kernel, reply, outlet, request);
+  };
+}
+
+/** Publishes busy before and idle after, whatever happens between. @see Jupyter messaging, "Kernel status". */
+async function bracketed<T>(
+  kernel: KernelState,
+  request: Message,
+  work: () => Promise<T>,
+): Promise<T | undefined> {
+  kernel.publish(request.header, "status", { execution_state: "busy" });
+  try {
+    return await work();
+  } catch (cause) {
+    process.stderr.write(
+      `A request of type ${request.header.msg_type} could not be answered: ${String(cause)}\n`,
+    );
+    return undefined;
+  } finally {
+    kernel.publish(request.header, "status", { execution_state: "idle" });
+  }
+}
+
+/** An unknown request gets its busy and idle, and no reply. */
+async function handle(kernel: KernelState, reply: ReplyTo, outlet: Outlet, request: Message): Promise<void> {
+  const type = request.header.msg_type;
+  const handler = Object.hasOwn(handlers, type) ? handlers[type] : undefined;
+  await bracketed(kernel, request, async () => {
+    const content = handler?.(kernel, request);
+    if (content !== undefined) reply(outlet, request, type.replace(/_request$/, "_reply"), content);
+  });
+}

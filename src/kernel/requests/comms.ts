@@ -1,0 +1,15 @@
+import type { Message } from "../protocol/message.js";
+import type { KernelState } from "./kernel-state.js";
+
+/**
+ * Nothing in this kernel offers a comm target, so none is ever open: an opened one is closed at once, and
+ * messages to unknown ones are ignored, as the protocol wants it.
+ * @see Jupyter messaging, "Custom Messages".
+ */
+export function commInfo(): object {
+  return { status: "ok", comms: {} };
+}
+
+export function commOpen(kernel: KernelState, request: Message): void {
+  kernel.publish(request.header, "comm_close", { comm_id: request.content["comm_id"], data: {} });
+}

@@ -1,0 +1,15 @@
+import type { Message } from "../protocol/message.js";
+import { commInfo, commOpen } from "./comms.js";
+import type { KernelState } from "./kernel-state.js";
+
+/** Answers a request: the content of the reply, or nothing for messages that get none. */
+export type Handler = (kernel: KernelState, request: Message) => object | undefined;
+
+/** Requests other than those that the transport thread answers itself and `execute_request`, which queues. */
+export const handlers: Readonly<Record<string, Handler>> = {
+  comm_info_request: commInfo,
+  comm_open: (kernel, request) => {
+    commOpen(kernel, request);
+    return undefined;
+  },
+};
