@@ -37,4 +37,26 @@ export interface CompiledRule {
     values: Float64Array,
     sensitivities: Float64Array,
   ) => void;
+  /**
+   * Gives the function that gathers a least-squares fit of the whole path, of its logarithms where asked;
+   * undefined where code is not generated or the unknowns are too many for it.
+   */
+  readonly pathSums: ((logarithmic: boolean) => PathSums) | undefined;
 }
+
+/**
+ * Runs a path and returns the sum of (weight * (observed - state))^2, with its sums by the unknowns, which are the
+ * constants in order and then the initial states: J'J, upper triangle row after row, then J'r.
+ *
+ * observed and weights [periods + 1, states]; a weight of 0 leaves a value out. sums [m (m + 1)/2 + m].
+ */
+export type PathSums = (
+  initial: Float64Array,
+  constants: Float64Array,
+  inputs: readonly Float64Array[],
+  from: number,
+  periods: number,
+  observed: Float64Array,
+  weights: Float64Array,
+  sums: Float64Array,
+) => number;

@@ -1,7 +1,7 @@
+import { expressionText } from "./expression-text.js";
 import { operations } from "./graph/operations.js";
 import type { Rule } from "./rule.js";
 import { ruleDefinition } from "./rule-definition.js";
-import { expressionText } from "./rule-text.js";
 import type { BinaryOperator, Expression } from "./syntax/expression.js";
 import type { Span } from "./syntax/token.js";
 

@@ -1,6 +1,7 @@
 export { compileRule, interpretRule } from "./code/compile-rule.js";
-export type { CompiledRule } from "./compiled-rule.js";
+export type { CompiledRule, PathSums } from "./compiled-rule.js";
 export { encloseStep, type HeldValues, type StepEnclosure } from "./enclose-step.js";
+export { eventOrder } from "./event-order.js";
 export { explainFailure, type StepFailure, type StepPlace } from "./explain-failure.js";
 export type { RuleFunction } from "./functions.js";
 export type { Interval } from "./graph/interval.js";
@@ -9,6 +10,8 @@ export { linearInConstants } from "./linear-in-constants.js";
 export { quantitiesAt } from "./quantities-at.js";
 export { recurrence } from "./recurrence.js";
 export type { RecurrenceOptions } from "./recurrence-options.js";
+export { type Roughness, type RoughPlace, roughness } from "./roughness.js";
 export type { ProcessNoise, Rule } from "./rule.js";
 export { type RuleLanguage, ruleLanguage } from "./rule-language.js";
 export { ruleText } from "./rule-text.js";
+export { ruleTex } from "./tex/rule-tex.js";

@@ -5,6 +5,7 @@ import { memoryOf } from "./graph/build-graph.js";
 import type { RecurrenceOptions } from "./recurrence-options.js";
 import type { Rule } from "./rule.js";
 import { defineRule, keepDefinition } from "./rule-definition.js";
+import { unitFindings } from "./units/unit-findings.js";
 
 function copyOf<T>(given: Readonly<Record<string, T>> | undefined): Readonly<Record<string, T>> {
   const entries = Object.entries(given ?? {}).map(([name, value]) => [
@@ -37,7 +38,10 @@ export function recurrence(text: string, options: RecurrenceOptions = {}): Rule 
   const { checked } = definition;
   checkOptions(checked, options);
   const first = checked.statements.find(({ kind }) => kind !== "quantity")!;
-  const findings: readonly Warning[] = Object.freeze([...checked.findings]);
+  const findings: readonly Warning[] = Object.freeze([
+    ...checked.findings,
+    ...unitFindings(checked, options.units ?? {}),
+  ]);
   const rule: Rule = Object.freeze({
     kind: "rule",
     text: normal,

@@ -1,12 +1,16 @@
-import type { CompiledRule } from "../compiled-rule.js";
+import type { CompiledRule, PathSums } from "../compiled-rule.js";
 import { modulo, roundTo } from "../graph/operations.js";
 import type { RuleGraph } from "../graph/rule-graph.js";
 import { interpretGraph } from "./interpret-graph.js";
 import { pathSource, stepSource } from "./path-source.js";
 import { sensitivitySource } from "./sensitivity-source.js";
+import { sumsSource } from "./sums-source.js";
 
 /** Wider sensitivity tables would fill the registers' spill space many times over; a plain loop serves them. */
 const widestTable = 400;
+
+/** With more unknowns than this the sums no longer fit into registers, and are gathered from a table instead. */
+const mostSummed = 8;
 
 /** Functions by their source: rules that read the same share one, and its optimisation. */
 const made = new Map<string, unknown>();
@@ -49,7 +53,17 @@ export function generateRule(rule: RuleGraph): CompiledRule {
           sensitivitySource(rule),
         ),
   );
+  const [plainSums, logSums] = [false, true].map((logarithmic) =>
+    late(() =>
+      makeFunction<PathSums>(
+        "initial, constants, inputs, from, periods, observed, weights, sums",
+        sumsSource(rule, logarithmic),
+      ),
+    ),
+  ) as [() => PathSums, () => PathSums];
+  const summed = rule.states + rule.constants <= mostSummed;
   return {
+    pathSums: summed ? (logarithmic) => (logarithmic ? logSums() : plainSums()) : undefined,
     get step() {
       return step();
     },

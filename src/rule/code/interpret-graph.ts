@@ -38,7 +38,7 @@ export function interpretGraph(rule: RuleGraph): CompiledRule {
       values.set(state, i * width);
     }
   };
-  return { step, path, pathWithSensitivities: interpretSensitivities(rule) };
+  return { step, path, pathWithSensitivities: interpretSensitivities(rule), pathSums: undefined };
 }
 
 function interpretSensitivities(rule: RuleGraph): CompiledRule["pathWithSensitivities"] {

@@ -1,0 +1,61 @@
+import type { RuleGraph } from "../graph/rule-graph.js";
+import { stepDerivatives } from "../graph/step-derivatives.js";
+import { type EmittedProgram, emitProgram } from "./emit-program.js";
+import { sensitivityPattern } from "./sensitivity-pattern.js";
+
+/** A sensitivity in local variables: of which slot, to which unknown, and its place in a row of the table. */
+export interface SensitivityCell {
+  readonly slot: number;
+  readonly unknown: number;
+  readonly at: number;
+  /** Whether it can ever differ from zero. */
+  readonly live: boolean;
+}
+
+/** What every function that carries sensitivities along a path is put together from. */
+export interface SensitivityParts {
+  readonly program: EmittedProgram;
+  readonly cells: readonly SensitivityCell[];
+  /** `let` lines at the initial state. */
+  readonly declared: readonly string[];
+  /** `const` lines of the next period, and the lines that then move there. */
+  readonly next: readonly string[];
+  readonly moved: readonly string[];
+}
+
+/** Recurrence of the sensitivities: d x' / d p = sum over states (d f / d x)(d x / d p) + d f / d p. */
+export function sensitivityParts(rule: RuleGraph): SensitivityParts {
+  const { byState, byConstant } = stepDerivatives(rule);
+  const program = emitProgram([...rule.next, ...byState.flat(), ...byConstant.flat()]);
+  const pattern = sensitivityPattern(rule);
+  const unknowns = rule.constants + rule.states;
+  const cells = rule.next.flatMap((_, slot) =>
+    Array.from({ length: unknowns }, (_, unknown) => ({
+      slot,
+      unknown,
+      at: slot * unknowns + unknown,
+      live: pattern[slot]![unknown]!,
+    })),
+  );
+  const live = cells.filter((cell) => cell.live);
+  const next = ({ slot, unknown }: SensitivityCell): string => {
+    const terms: string[] = [];
+    for (let k = 0; k < rule.states; k++) {
+      const source = program.read(byState[slot]![k]!);
+      if (source === "0" || !pattern[k]![unknown]) continue;
+      terms.push(source === "1" ? `d${k}_${unknown}` : `${source} * d${k}_${unknown}`);
+    }
+    const own = unknown < rule.constants ? program.read(byConstant[slot]![unknown]!) : "0";
+    if (own !== "0") terms.push(own);
+    return `const e${slot}_${unknown} = ${terms.join(" + ")};`;
+  };
+  return {
+    program,
+    cells,
+    declared: live.map(
+      ({ slot, unknown }) => `let d${slot}_${unknown} = ${unknown === rule.constants + slot ? 1 : 0};`,
+    ),
+    next: live.map(next),
+    moved: live.map(({ slot, unknown }) => `d${slot}_${unknown} = e${slot}_${unknown};`),
+  };
+}

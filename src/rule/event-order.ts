@@ -1,0 +1,13 @@
+import type { Rule } from "./rule.js";
+import { ruleDefinition } from "./rule-definition.js";
+
+/**
+ * The order of events inside a period, as one line: what is worked out first, and what the period ends with.
+ *
+ * @example eventOrder(recurrence("interest = i*owed\nΔowed = interest - p")); // "interest, then owed at t+1"
+ */
+export function eventOrder(rule: Rule): string {
+  return ruleDefinition(rule)
+    .checked.statements.map(({ kind, name }) => (kind === "quantity" ? name : `${name} at t+1`))
+    .join(", then ");
+}

@@ -1,0 +1,7 @@
+/** A number as papers print it: powers of ten written out. */
+export function texNumber(value: number | string): string {
+  const [digits = "", exponent] = String(value).split(/e/iu);
+  if (exponent === undefined) return digits;
+  const power = `10^{${Number(exponent)}}`;
+  return digits === "1" ? power : `${digits} \\times ${power}`;
+}

@@ -1,0 +1,85 @@
+/** Powers of basic units; an empty map is a pure number. */
+export type Unit = ReadonlyMap<string, number>;
+
+/** Lengths of a period: a step is one period, so they cancel in a rule and are compared with each other only. */
+const periods: ReadonlySet<string> = new Set([
+  "second",
+  "s",
+  "minute",
+  "min",
+  "hour",
+  "h",
+  "day",
+  "d",
+  "week",
+  "month",
+  "quarter",
+  "year",
+  "yr",
+  "period",
+  "step",
+]);
+
+const singular = (word: string): string =>
+  periods.has(word.replace(/s$/u, "")) ? word.replace(/s$/u, "") : word;
+
+function multiplied(into: Map<string, number>, word: string, power: number): void {
+  const total = (into.get(word) ?? 0) + power;
+  if (total === 0) into.delete(word);
+  else into.set(word, total);
+}
+
+/**
+ * Reads a unit such as "cells/mL", "1/month", "10^4 cells/mL", "kg per ha": factors joined by blanks, * or /,
+ * each with a whole power. A scale such as 10^4 or 1000 is a factor like a word.
+ */
+export function parseUnit(text: string): Unit {
+  const unit = new Map<string, number>();
+  let sign = 1;
+  for (const [part] of text.replace(/\bper\b/gu, "/").matchAll(/\/|[^\s/*·]+/gu)) {
+    if (part === "/") {
+      sign = -1;
+      continue;
+    }
+    const [, word = part, power = "1"] = /^(.*?[^\d])\^?(-?\d+)$/u.exec(part) ?? [];
+    const isScale = /^[\d.]/u.test(part);
+    if (isScale) multiplied(unit, part === "1" ? "" : part, sign);
+    else multiplied(unit, singular(word.replace(/\^$/u, "")), sign * Number(power));
+  }
+  unit.delete("");
+  return unit;
+}
+
+export const noUnit: Unit = new Map();
+
+/** The product of two units, the second raised to a power. */
+export function joinUnits(a: Unit, b: Unit, power: number): Unit {
+  const unit = new Map(a);
+  for (const [word, own] of b) multiplied(unit, word, own * power);
+  return unit;
+}
+
+export const raisedUnit = (unit: Unit, power: number): Unit => joinUnits(noUnit, unit, power);
+
+/** The part of a unit that is not the length of a period. */
+export const withoutPeriods = (unit: Unit): Unit => new Map([...unit].filter(([word]) => !periods.has(word)));
+
+/** The lengths of a period that a unit speaks of. */
+export const periodsIn = (unit: Unit): readonly string[] =>
+  [...unit.keys()].filter((word) => periods.has(word));
+
+export const sameUnit = (a: Unit, b: Unit): boolean => {
+  const left = withoutPeriods(a);
+  const right = withoutPeriods(b);
+  return left.size === right.size && [...left].every(([word, power]) => right.get(word) === power);
+};
+
+const powered = (word: string, power: number): string => (power === 1 ? word : `${word}^${power}`);
+
+/** A unit as text: what is multiplied, then what is divided by. */
+export function unitText(unit: Unit): string {
+  const above = [...unit].filter(([, power]) => power > 0).map(([word, power]) => powered(word, power));
+  const below = [...unit].filter(([, power]) => power < 0).map(([word, power]) => powered(word, -power));
+  if (below.length === 0) return above.length === 0 ? "a pure number" : above.join(" ");
+  return `${above.length === 0 ? "1" : above.join(" ")}/${below.join("/")}`;
+}
