@@ -1,6 +1,14 @@
+export {
+  type ChangeFigureOptions,
+  type ChangePairs,
+  changeFigure,
+  type DrawnEquilibrium,
+} from "./change-figure.js";
 export { warmPictures } from "./draw-picture.js";
+export { type DrawnBand, type FanFigureOptions, fanFigure, type ProjectedSeries } from "./fan-figure.js";
 export { type Axis, type Figure, type FigureOptions, figure, type Panel } from "./figure.js";
 export { libraryAgain } from "./figure-library.js";
+export { type FittedFigureOptions, type FittedSeries, fittedFigure } from "./fitted-figure.js";
 export type {
   ArrowLayer,
   BandLayer,
@@ -12,3 +20,6 @@ export type {
   ThresholdLayer,
   VerticalLayer,
 } from "./layer.js";
+export { type DrawnProfile, type ProfileFigureOptions, profileFigure } from "./profile-figure.js";
+export { type FlaggedValue, type RecordFigureOptions, recordFigure } from "./record-figure.js";
+export type { DrawnLine, RecordedSeries } from "./recorded-series.js";

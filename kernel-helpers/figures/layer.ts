@@ -19,6 +19,8 @@ export interface PointsLayer extends Named {
   readonly upper?: ArrayLike<number>;
   /** "plain" by its style's shape; "open" the same, hollow; "flag" a large hollow diamond around a flagged value. */
   readonly look?: "plain" | "open" | "flag";
+  /** Drawn larger than readings are: equilibria, marks of a kind of their own. */
+  readonly large?: boolean;
 }
 
 /** Values joined in their order; NaN breaks the line. */

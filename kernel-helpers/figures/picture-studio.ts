@@ -1,5 +1,7 @@
 import { readFile } from "node:fs/promises";
 import { createRequire } from "node:module";
+import { look } from "../tables/index.js";
+import { indexedPng } from "./indexed-png.js";
 import { type ScreenlessWindow, standInForScreen } from "./screen-stand-in.js";
 
 /** Draws one plot as a PNG. */
@@ -19,7 +21,7 @@ export async function pictureStudio(): Promise<DrawPicture> {
   const [{ JSDOM, VirtualConsole }, { Resvg }, library] = await Promise.all([
     import("jsdom"),
     import("@resvg/resvg-js"),
-    readFile(packages.resolve("plotly.js-basic-dist-min"), "utf8"),
+    readFile(packages.resolve("plotly.js-dist"), "utf8"),
   ]);
   const page = new JSDOM("<!doctype html><body></body>", {
     runScripts: "outside-only",
@@ -37,9 +39,11 @@ export async function pictureStudio(): Promise<DrawPicture> {
     );
     const options = {
       fitTo: { mode: "zoom", value: zoom },
+      background: look.paper,
       font: { defaultFontFamily: "DejaVu Sans" },
     } as const;
-    return new Resvg(svg, options).render().asPng();
+    const { width, height, pixels } = new Resvg(svg, options).render();
+    return indexedPng({ width, height, bytes: pixels });
   };
   await draw([{ type: "scatter", x: [0, 1], y: [0, 1], name: "a" }], { width: 200, height: 200 });
   return draw;

@@ -92,7 +92,8 @@ function axisLook(axis: Axis, columns: number, still: boolean): object {
     ticks: "outside",
     tickcolor: look.quiet,
     ticklen: 5,
-    gridcolor: "#e3e8e6",
+    // See-through, because marks are drawn beneath the grid and must not be painted over by it.
+    gridcolor: "rgba(22,38,46,0.11)",
     zeroline: false,
     nticks: columns < 50 ? 5 : 8,
     separatethousands: true,

@@ -38,7 +38,17 @@ function threshold(layer: ThresholdLayer, at: number, colour: string, room: numb
     annotations:
       layer.inLegend === false
         ? []
-        : [label(layer, room, { xref, yref, x: 1, y: layer.y, xanchor: "right", yanchor: "bottom" })],
+        : [
+            label(layer, room, {
+              xref,
+              yref,
+              x: 0,
+              y: layer.y,
+              xanchor: "left",
+              yanchor: "bottom",
+              xshift: 3,
+            }),
+          ],
   };
 }
 

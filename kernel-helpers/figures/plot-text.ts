@@ -28,7 +28,9 @@ function brokenLines(text: string, columns: number, lines: number): string[] {
     }
   }
   broken.push(line);
-  return broken.length <= lines ? broken : [...broken.slice(0, lines - 1), `${broken[lines - 1]}…`];
+  return broken.length <= lines
+    ? broken
+    : [...broken.slice(0, lines - 1), `${broken[lines - 1]?.replace(/…$/, "")}…`];
 }
 
 /** "Density (10^4 cells/mL)": what an axis measures, with its unit. */

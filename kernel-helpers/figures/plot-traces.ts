@@ -53,7 +53,7 @@ function pointsTrace(layer: PointsLayer, style: SeriesStyle): PlotTrace {
     mode: "markers",
     x: picked(layer.x, kept),
     y,
-    marker: pointLook(layer.look ?? "plain", style),
+    marker: { ...pointLook(layer.look ?? "plain", style), ...(layer.large ? { size: 13 } : {}) },
     ...bars,
   };
 }

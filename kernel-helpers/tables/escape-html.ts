@@ -7,6 +7,9 @@ const entities: Readonly<Record<string, string>> = {
   $: "&#36;",
 };
 
+// Control characters other than tab and line end, and marks that would turn round the text after them.
+const acting = /(?![\t\n])\p{Cc}|[\u202a-\u202e\u2066-\u2069]/gu;
+
 /**
  * Text as HTML that shows exactly that text, in an element or an attribute.
  *
@@ -15,5 +18,5 @@ const entities: Readonly<Record<string, string>> = {
  * @example escapeHtml("<b>"); // "&lt;b&gt;"
  */
 export function escapeHtml(text: string): string {
-  return text.replace(/[&<>"'$]/g, (sign) => entities[sign] ?? sign);
+  return text.replace(acting, " ").replace(/[&<>"'$]/g, (sign) => entities[sign] ?? sign);
 }

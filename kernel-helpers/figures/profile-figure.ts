@@ -1,0 +1,81 @@
+import { type Figure, figure, type Panel } from "./figure.js";
+import type { Layer } from "./layer.js";
+
+/** How the fit worsens as one constant is held away from its estimate. */
+export interface DrawnProfile {
+  readonly constant: string;
+  /** "" = none. */
+  readonly unit: string;
+  /** Values the constant was held at, increasing. */
+  readonly held: ArrayLike<number>;
+  /** The measure of worsening at each, 0 at the estimate. */
+  readonly worsening: ArrayLike<number>;
+  readonly estimate: number;
+  /** Ends of the interval; undefined where it has none. */
+  readonly lower: number | undefined;
+  readonly upper: number | undefined;
+}
+
+/** What `profileFigure` draws. */
+export interface ProfileFigureOptions {
+  readonly title: string;
+  readonly profiles: readonly DrawnProfile[];
+  /** What worsening is measured by, for the upright axis: "F", "2 × fall of log-likelihood". */
+  readonly measure: string;
+  /** Worsening at the ends of the interval. */
+  readonly cut: number;
+  /** "95%" */
+  readonly level: string;
+  readonly notes?: readonly string[];
+}
+
+/**
+ * Profiles of constants, a panel each, with the cut-off and the interval it gives; an arrow at the cut-off says that
+ * the record sets no limit on that side.
+ */
+export function profileFigure(options: ProfileFigureOptions): Figure {
+  const { title, profiles, measure, cut, level, notes = [] } = options;
+  const alone = profiles.length === 1;
+  const panels = profiles.map(
+    (profile): Panel => ({
+      title: alone ? "" : profile.constant,
+      x: { title: profile.constant, unit: profile.unit },
+      y: { title: measure, ends: [0, 2.6 * cut] },
+      layers: profileLayers(profile, cut, level),
+    }),
+  );
+  return figure({ title, panels, notes: [...profiles.flatMap(openEnds), ...notes] });
+}
+
+function profileLayers(profile: DrawnProfile, cut: number, level: string): Layer[] {
+  const { held, worsening, estimate, lower, upper } = profile;
+  const first = held[0] ?? estimate;
+  const last = held[held.length - 1] ?? estimate;
+  const ends = [lower, upper].filter((end) => end !== undefined);
+  return [
+    { mark: "line", name: "profile", x: held, y: worsening, style: 0 },
+    { mark: "threshold", name: `cut-off ${level}`, y: cut, style: 1 },
+    { mark: "vertical", name: "estimate", x: estimate, style: 5 },
+    ...ends.map((x): Layer => ({ mark: "vertical", name: "end of interval", x, style: 3, inLegend: false })),
+    ...(lower === undefined ? [noLimit(first, cut, "left")] : []),
+    ...(upper === undefined ? [noLimit(last, cut, "right")] : []),
+  ];
+}
+
+function noLimit(x: number, y: number, towards: "left" | "right"): Layer {
+  return {
+    mark: "arrow",
+    name: towards === "left" ? "no lower limit" : "no upper limit",
+    x,
+    y,
+    towards,
+    style: 3,
+  };
+}
+
+function openEnds({ constant, lower, upper }: DrawnProfile): string[] {
+  if (lower !== undefined && upper !== undefined) return [];
+  const side =
+    lower === undefined && upper === undefined ? "either side" : lower === undefined ? "below" : "above";
+  return [`This record sets no limit on ${constant} ${side}.`];
+}
