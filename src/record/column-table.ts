@@ -54,3 +54,14 @@ export function isEmpty(cell: unknown): boolean {
   if (typeof cell === "number") return Number.isNaN(cell);
   return typeof cell === "string" && cell.trim() === "";
 }
+
+/** Whether a value is a table of columns already. */
+export function isColumnTable(value: object): value is ColumnTable {
+  const { names, columns } = value as Partial<ColumnTable>;
+  return (
+    Array.isArray(names) &&
+    Array.isArray(columns) &&
+    names.length === columns.length &&
+    columns.every((column) => Array.isArray(column) || column instanceof Float64Array)
+  );
+}

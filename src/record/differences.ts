@@ -1,5 +1,5 @@
 import type { Warning } from "../numeric/index.js";
-import { differenceSeries } from "./difference-series.js";
+import { type DifferenceSeries, differenceSeries } from "./difference-series.js";
 import type { Observations } from "./observations.js";
 import { noPairs, optionWrong } from "./refusals.js";
 
@@ -13,27 +13,6 @@ export interface DifferenceOptions {
   readonly per?: "step" | "value" | "log";
   /** Steps in a season, 12 for months of a year: first takes the difference to the season before. */
   readonly seasonal?: number;
-}
-
-/** The pairs of one state of one series. All arrays have one entry a pair, in order of the later row. */
-export interface DifferenceSeries {
-  readonly group: string;
-  readonly state: string;
-  /** Step index of the earlier row; the later one lies `steps` after it. */
-  readonly index: Int32Array;
-  readonly steps: Int32Array;
-  /** 1-based record row of the later value. */
-  readonly rows: Int32Array;
-  readonly present: Float64Array;
-  readonly next: Float64Array;
-  /** next - present, over all `steps`: never spread over them. */
-  readonly change: Float64Array;
-  /** next / present; NaN where present is 0. */
-  readonly ratio: Float64Array;
-  /** change / present; NaN where present is 0. */
-  readonly perHead: Float64Array;
-  /** What was asked for by `order`, `per` and `seasonal`. */
-  readonly difference: Float64Array;
 }
 
 /** Differences of a record, pair by pair, with the multi-step pairs labelled. */

@@ -1,0 +1,32 @@
+import type { Finding, Observations } from "../../src/record/index.js";
+import { type Table, table } from "../tables/index.js";
+
+/** What was found in a record, one line a finding; undefined when nothing was. */
+export function findingsTable(findings: readonly Finding[]): Table | undefined {
+  if (findings.length === 0) return undefined;
+  return table({
+    title: "Findings",
+    columns: [
+      { key: "row", label: "Row", kind: "integer" },
+      { key: "message", label: "What was found", kind: "text" },
+      { key: "done", label: "What was done", kind: "text" },
+    ],
+    rows: findings.map(({ row, message, done }) => ({ row, message, done })),
+    limit: 24,
+    format: { group: "" },
+  });
+}
+
+/** "25 rows read, 24 used, 2 flagged, 0 corrected, 1 refused." */
+export function countsSentence({ counts }: Observations): string {
+  const { read, used, flagged, corrected, refused } = counts;
+  return `${read} rows read, ${used} used, ${flagged} flagged, ${corrected} corrected, ${refused} refused.`;
+}
+
+/** Period, step, whether levels or flows, and the order of events, in one line. */
+export function periodSentence(observations: Observations): string {
+  const { column, step, calendar } = observations.period;
+  const counted = calendar ?? `${step.every} ${step.of}`;
+  const order = observations.order === "" ? "not stated" : observations.order;
+  return `Period "${column}", one step is ${counted}; each value is a ${observations.measured}; order of events: ${order}.`;
+}

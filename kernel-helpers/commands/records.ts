@@ -1,0 +1,58 @@
+import type { DataFrame } from "danfojs-node";
+import {
+  type DifferenceOptions,
+  type Differences,
+  differences as differencesOf,
+  type ObservationOptions,
+  type Observations,
+  observations as observe,
+} from "../../src/record/index.js";
+import { type ReadOptions, readTable } from "../../src/store/index.js";
+import { columnsOf, noteFrame, notesOf, type RecordLike, toFrame } from "../dataframe/index.js";
+import { showing } from "../tables/index.js";
+import { caseLog } from "./case-log.js";
+import { differencesBundle } from "./show-differences.js";
+import { observationsBundle } from "./show-observations.js";
+
+/**
+ * Reads a record: a text file with delimiters, a workbook, Parquet, JSON, or a table of a database file.
+ *
+ * What a text file does not show (delimiter, decimal sign, order of dates) is asked for in the error, never
+ * guessed. The file's SHA-256 is kept with the frame and noted for the case's rerun block.
+ *
+ * @param path - relative to the notebook's folder.
+ * @returns a DataFrame that shows itself; `sourceOf(frame)` tells where it came from.
+ * @throws {ModelError} `no-such-file` | `format-unknown` | `no-data-rows` | `unreadable-file` | `ragged-row` |
+ *   `delimiter-unclear` | `decimal-sign-unclear` | `ambiguous-date` | `encoding-unclear` and others of its kind.
+ * @example const readings = await readRecord("data/algae-line-3.csv");
+ */
+export async function readRecord(path: string, options: ReadOptions = {}): Promise<DataFrame> {
+  const table = await readTable(path, options);
+  const frame = toFrame(table);
+  noteFrame(frame, { ...notesOf(frame), source: table.source });
+  caseLog.noteRecord({ path, rows: table.source.rows, checksum: table.source.checksum });
+  return frame;
+}
+
+/**
+ * Makes a record ready for rules: values by whole steps for each series, with all that was found on the way.
+ *
+ * @param record - a DataFrame, rows as objects, or columns by name.
+ * @throws {ModelError} as the engine's `observations`; each message names row, column, value and what to do.
+ * @example
+ * const counts = observations(readings, { period: "hour", step: { every: 12, of: "hour" }, by: "flask", value: "density" });
+ */
+export function observations(record: RecordLike, options: ObservationOptions): Observations {
+  const made = { ...observe(columnsOf(record), options) };
+  return showing(made, () => observationsBundle(made));
+}
+
+/**
+ * Takes the differences of a record and shows them: table, change-against-value figure, findings.
+ *
+ * @example differences(counts, { per: "log" });
+ */
+export function differences(record: Observations, options: DifferenceOptions = {}): Differences {
+  const made = { ...differencesOf(record, options) };
+  return showing(made, () => differencesBundle(made));
+}

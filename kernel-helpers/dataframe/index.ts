@@ -1,0 +1,3 @@
+export { columnsOf, type RecordLike } from "./columns-of.js";
+export { noteFrame, notesOf, sourceOf } from "./frame-notes.js";
+export { toFrame } from "./to-frame.js";

@@ -1,0 +1,57 @@
+import type { DataFrame } from "danfojs-node";
+import { type Column, type ColumnTable, rowCount } from "../../src/record/index.js";
+import { danfo } from "./danfo.js";
+import { noteFrame } from "./frame-notes.js";
+import { showFrames } from "./show-frames.js";
+
+/**
+ * A danfo DataFrame of a table. A missing number is null in the frame, never NaN turned to zero.
+ *
+ * danfo makes a property of every column name, so a name that one of its own members has (`index`, `values`,
+ * `shape`), an empty one and a second equal one cannot be carried: such a column is called "values (column)",
+ * and the commands of this package still know it by the record's name.
+ */
+export function toFrame(table: ColumnTable): DataFrame {
+  const names = frameNames(table.names);
+  const rows = Array.from({ length: rowCount(table) }, (_, row) =>
+    table.columns.map((column) => cellAt(column, row)),
+  );
+  const frame = new (danfo().DataFrame)(rows, { columns: [...names], dtypes: table.columns.map(kindOf) });
+  showFrames();
+  const renamed = names.some((name, i) => name !== table.names[i]);
+  noteFrame(frame, {
+    ...(renamed && { names: table.names }),
+    ...(table.decisions && { decisions: table.decisions }),
+  });
+  return frame;
+}
+
+function cellAt(column: Column, row: number): unknown {
+  const cell = column[row];
+  return cell === undefined || Number.isNaN(cell) ? null : cell;
+}
+
+/** danfo guesses a column's kind from its first rows; here every cell is asked. */
+function kindOf(column: Column): string {
+  if (column instanceof Float64Array) return "float32";
+  const cells = column.filter((cell) => cell !== null && cell !== undefined);
+  if (cells.length > 0 && cells.every((cell) => typeof cell === "number")) return "float32";
+  if (cells.length > 0 && cells.every((cell) => typeof cell === "boolean")) return "boolean";
+  return "string";
+}
+
+function frameNames(names: readonly string[]): readonly string[] {
+  const taken = new Set<string>();
+  return names.map((name, i) => {
+    const plain = name === "" ? `column ${i + 1}` : isMember(name) ? `${name} (column)` : name;
+    let free = plain;
+    for (let n = 2; taken.has(free); n++) free = `${plain} (${n})`;
+    taken.add(free);
+    return free;
+  });
+}
+
+function isMember(name: string): boolean {
+  const own = new (danfo().DataFrame)([[0]], { columns: ["a"] });
+  return name !== "a" && name in own;
+}

@@ -1,0 +1,122 @@
+import type { Column } from "../record/index.js";
+import { type DateOrder, dateOrdersOf, isoDate, plainDate } from "./date-form.js";
+import { decimalSignOf, isNegative, writtenNumber } from "./number-form.js";
+import type { ReadOptions } from "./read-options.js";
+import { ambiguousDate, decimalSignUnclear, mixedDates } from "./refusals.js";
+
+/** Cells of one column as text; null where nothing stands. */
+export interface TextColumn {
+  readonly name: string;
+  readonly cells: readonly (string | null)[];
+}
+
+/** Columns with numbers and dates read, and what was found out on the way. */
+export interface TypedColumns {
+  readonly columns: readonly Column[];
+  readonly found: readonly string[];
+}
+
+/**
+ * Reads the numbers and dates of text columns. A column is one of numbers only when every cell in it is.
+ *
+ * @throws {ModelError} `decimal-sign-unclear` | `ambiguous-date` | `mixed-dates`: what cannot be told is asked.
+ */
+export function typedColumns(
+  texts: readonly TextColumn[],
+  delimiter: string,
+  options: ReadOptions,
+): TypedColumns {
+  const numbers = texts.filter(({ cells }) => allOf(cells, (cell) => decimalSignOf(cell) !== undefined));
+  const decimal = options.decimal ?? decimalOf(numbers, delimiter);
+  const found: string[] = [];
+  if (decimal === ",") found.push("Numbers are read with a decimal comma.");
+  const columns = texts.map((text): Column => {
+    if (numbers.includes(text)) return numbersOf(text, decimal, found) ?? text.cells;
+    return options.dates === "text" ? text.cells : (datesOf(text, options.dates, found) ?? text.cells);
+  });
+  return { columns, found };
+}
+
+function allOf(cells: readonly (string | null)[], holds: (cell: string) => boolean): boolean {
+  let any = false;
+  for (const cell of cells) {
+    if (cell === null || cell.trim() === "") continue;
+    if (!holds(cell)) return false;
+    any = true;
+  }
+  return any;
+}
+
+/** The one decimal sign that the number columns of a file use. */
+function decimalOf(columns: readonly TextColumn[], delimiter: string): "." | "," {
+  let settled: "." | "," | undefined;
+  let unclear: { row: number; name: string; cell: string } | undefined;
+  for (const { name, cells } of columns) {
+    for (let i = 0; i < cells.length; i++) {
+      const cell = cells[i];
+      if (cell === null || cell === undefined || cell.trim() === "") continue;
+      const sign = decimalSignOf(cell);
+      if (sign === "either") unclear ??= { row: i + 1, name, cell };
+      if (sign !== "." && sign !== ",") continue;
+      if (settled !== undefined && sign !== settled) throw decimalSignUnclear(i + 1, name, cell);
+      settled = sign;
+    }
+  }
+  // Where cells are separated by commas the writer's decimal sign is the point: a decimal comma would need
+  // every number quoted. (Common practice of spreadsheet programs, no source.)
+  if (settled !== undefined || unclear === undefined || delimiter === ",") return settled ?? ".";
+  throw decimalSignUnclear(unclear.row, unclear.name, unclear.cell);
+}
+
+function numbersOf(text: TextColumn, decimal: "." | ",", found: string[]): Float64Array | undefined {
+  const values = new Float64Array(text.cells.length);
+  let credits = 0;
+  for (let i = 0; i < values.length; i++) {
+    const cell = text.cells[i];
+    if (cell === null || cell === undefined || cell.trim() === "") {
+      values[i] = Number.NaN;
+      continue;
+    }
+    const value = writtenNumber(cell, decimal);
+    if (value === undefined) return undefined;
+    if (value < 0 && !/^[-\u2212]/.test(cell.trim()) && isNegative(cell)) credits++;
+    values[i] = value;
+  }
+  if (credits > 0)
+    found.push(
+      `In "${text.name}" ${credits} amounts in brackets or with a minus behind are read as negative.`,
+    );
+  return values;
+}
+
+function datesOf(
+  text: TextColumn,
+  asked: DateOrder | undefined,
+  found: string[],
+): readonly (string | null)[] | undefined {
+  if (allOf(text.cells, (cell) => plainDate(cell) !== undefined))
+    return text.cells.map((cell) => (cell === null ? null : (plainDate(cell) ?? null)));
+  if (!allOf(text.cells, (cell) => dateOrdersOf(cell) !== undefined)) return undefined;
+  const order = asked ?? orderOf(text);
+  found.push(`Dates of "${text.name}" are read as ${order}.`);
+  return text.cells.map((cell, i) => {
+    if (cell === null || cell.trim() === "") return null;
+    const iso = isoDate(cell, order);
+    if (iso === undefined) throw mixedDates(i + 1, text.name, cell, order);
+    return iso;
+  });
+}
+
+/** The order that every cell can have; a cell that can have only one settles it. */
+function orderOf({ name, cells }: TextColumn): DateOrder {
+  let settled: DateOrder | undefined;
+  for (let i = 0; i < cells.length; i++) {
+    const orders = dateOrdersOf(cells[i] ?? "");
+    if (orders?.length !== 1) continue;
+    if (settled !== undefined && orders[0] !== settled) throw mixedDates(i + 1, name, cells[i]!, settled);
+    settled = orders[0];
+  }
+  if (settled !== undefined) return settled;
+  const first = cells.findIndex((cell) => cell !== null && cell.trim() !== "");
+  throw ambiguousDate(first + 1, name, cells[first]!);
+}

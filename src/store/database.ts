@@ -1,0 +1,52 @@
+import type { DuckDBConnection, DuckDBDataChunk, DuckDBInstance } from "@duckdb/node-api";
+
+let started: Promise<DuckDBInstance> | undefined;
+
+/** Runs work on a connection of the in-memory database, which is loaded when first asked for. */
+export async function withDatabase<T>(work: (connection: DuckDBConnection) => Promise<T>): Promise<T> {
+  started ??= import("@duckdb/node-api").then(({ DuckDBInstance }) => DuckDBInstance.create(":memory:"));
+  const connection = await (await started).connect();
+  try {
+    return await work(connection);
+  } finally {
+    connection.closeSync();
+  }
+}
+
+/** A text as an SQL literal. */
+export function quoted(text: string): string {
+  return `'${text.replaceAll("'", "''")}'`;
+}
+
+/** A name as an SQL identifier. */
+export function identifier(name: string): string {
+  return `"${name.replaceAll('"', '""')}"`;
+}
+
+/** Numbers of one column of many chunks; NaN where a value is missing. */
+export function numbersOf(chunks: readonly DuckDBDataChunk[], column: number, rows: number): Float64Array {
+  const values = new Float64Array(rows);
+  let at = 0;
+  for (const chunk of chunks) {
+    const vector = chunk.getColumnVector(column);
+    for (let i = 0; i < chunk.rowCount; i++) values[at++] = Number(vector.getItem(i) ?? Number.NaN);
+  }
+  return values;
+}
+
+/** Cells of one column of many chunks, as a conversion gives them; null where a value is missing. */
+export function cellsOf(
+  chunks: readonly DuckDBDataChunk[],
+  column: number,
+  convert: (value: unknown) => unknown,
+): unknown[] {
+  const cells: unknown[] = [];
+  for (const chunk of chunks) {
+    const vector = chunk.getColumnVector(column);
+    for (let i = 0; i < chunk.rowCount; i++) {
+      const value = vector.getItem(i);
+      cells.push(value === null ? null : convert(value));
+    }
+  }
+  return cells;
+}

@@ -1,0 +1,115 @@
+import { open, readFile } from "node:fs/promises";
+import type { Column } from "../record/index.js";
+import { columnNames } from "./column-names.js";
+import { type TextColumn, typedColumns } from "./csv-columns.js";
+import { delimiterOf } from "./csv-dialect.js";
+import { type CsvRecord, csvRecords } from "./csv-records.js";
+import { decodedText } from "./decoded-text.js";
+import { decimalSignOf } from "./number-form.js";
+import type { ReadOptions } from "./read-options.js";
+import { readPlainCsv } from "./read-plain-csv.js";
+import { emptyFile, headerMissing, raggedRow, unendedQuote } from "./refusals.js";
+
+/** Columns of a file with what was found out about it. */
+export interface ReadColumns {
+  readonly names: readonly string[];
+  readonly columns: readonly Column[];
+  readonly found: readonly string[];
+}
+
+const headBytes = 1 << 18;
+
+/**
+ * Reads delimited text. A plain file (UTF-8, decimal points, no dates to put in order) is read by the database
+ * engine; any other, and one that the engine refuses, is read here, where every cell can be looked at.
+ */
+export async function readCsv(path: string, shownPath: string, options: ReadOptions): Promise<ReadColumns> {
+  const head = await headOf(path);
+  const plain = options.encoding === undefined && options.skip === undefined && options.missing === undefined;
+  if (plain && head.isWholeText) {
+    const delimiter = options.delimiter ?? delimiterOf(head.text, shownPath);
+    const read = await readPlainCsv(path, head.text, delimiter, options);
+    if (read !== undefined) return read;
+  }
+  const text = decodedText(await readFile(path), shownPath, options.encoding);
+  return readText(skipLines(text, options.skip ?? 0), shownPath, options);
+}
+
+async function headOf(path: string): Promise<{ readonly text: string; readonly isWholeText: boolean }> {
+  const file = await open(path);
+  try {
+    const { bytesRead, buffer } = await file.read(Buffer.alloc(headBytes), 0, headBytes, 0);
+    const bytes = buffer.subarray(0, bytesRead);
+    const end = bytesRead < headBytes ? bytesRead : bytes.lastIndexOf(10) + 1;
+    const text = bytes.toString("utf8", 0, end);
+    return { text, isWholeText: end > 0 && !text.includes("\ufffd") && !text.includes("\0") };
+  } finally {
+    await file.close();
+  }
+}
+
+function skipLines(text: string, lines: number): string {
+  let at = 0;
+  for (let n = 0; n < lines; n++) {
+    const next = /\r\n|\r|\n/g;
+    next.lastIndex = at;
+    at = next.exec(text) === null ? text.length : next.lastIndex;
+  }
+  return text.slice(at);
+}
+
+/** Reads delimited text cell by cell. */
+export function readText(text: string, path: string, options: ReadOptions): ReadColumns {
+  const delimiter = options.delimiter ?? delimiterOf(wholeLines(text), path);
+  const records = recordsOf(text, delimiter, path);
+  if (records.length === 0) throw emptyFile(path);
+  const found: string[] = [];
+  const width = records[0]!.cells.length;
+  const header = headerOf(records, path, options);
+  const names = columnNames(header, found);
+  const rows = withoutEmptyTail(options.header === false ? records : records.slice(1), found);
+  rows.forEach((record, i) => {
+    if (record.cells.length !== width) throw raggedRow(path, i + 1, record.line, record.cells.length, width);
+  });
+  const missing = new Set(options.missing);
+  const texts = names.map((name, at): TextColumn => {
+    const cells = rows.map(({ cells }) => (cells[at] === "" || missing.has(cells[at]!) ? null : cells[at]!));
+    return { name, cells };
+  });
+  const typed = typedColumns(texts, delimiter, options);
+  return { names, columns: typed.columns, found: [...found, ...typed.found] };
+}
+
+function wholeLines(text: string): string {
+  return text.length <= headBytes ? text : text.slice(0, text.lastIndexOf("\n", headBytes) + 1);
+}
+
+function recordsOf(text: string, delimiter: string, path: string): CsvRecord[] {
+  const records: CsvRecord[] = [];
+  const reading = csvRecords(text, delimiter);
+  for (;;) {
+    const next = reading.next();
+    if (!next.done) records.push(next.value);
+    else if (next.value !== undefined) throw unendedQuote(path, next.value.unendedQuoteAt);
+    else return records;
+  }
+}
+
+/** The first row, which must hold names: a row of numbers is data without a header. */
+function headerOf(records: readonly CsvRecord[], path: string, options: ReadOptions): readonly string[] {
+  const first = records[0]!.cells;
+  if (options.header === false) return first.map(() => "");
+  if (isAllNumbers(first)) throw headerMissing(path, first);
+  return first;
+}
+
+export function isAllNumbers(cells: readonly string[]): boolean {
+  return cells.every((cell) => decimalSignOf(cell) !== undefined);
+}
+
+function withoutEmptyTail(rows: readonly CsvRecord[], found: string[]): readonly CsvRecord[] {
+  let end = rows.length;
+  while (end > 0 && rows[end - 1]!.cells.every((cell) => cell.trim() === "")) end--;
+  if (end < rows.length) found.push(`${rows.length - end} empty rows at the end are left out.`);
+  return rows.slice(0, end);
+}

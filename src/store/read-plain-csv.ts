@@ -1,0 +1,92 @@
+import type { Column } from "../record/index.js";
+import { columnNames } from "./column-names.js";
+import { csvRecords } from "./csv-records.js";
+import { cellsOf, numbersOf, quoted, withDatabase } from "./database.js";
+import { dateOrdersOf, plainDate } from "./date-form.js";
+import { decimalSignOf, isNegative } from "./number-form.js";
+import type { ReadColumns } from "./read-csv.js";
+import type { ReadOptions } from "./read-options.js";
+
+const looked = 5000;
+
+type PlainForm = "number" | "text";
+
+/**
+ * Reads a file by the database engine where its first rows are plain, or gives undefined: where a cell needs to
+ * be looked at, or where the engine refuses a row that the first ones did not foretell.
+ */
+export async function readPlainCsv(
+  path: string,
+  head: string,
+  delimiter: string,
+  options: ReadOptions,
+): Promise<ReadColumns | undefined> {
+  const rows: (readonly string[])[] = [];
+  for (const { cells } of csvRecords(head, delimiter)) if (rows.push(cells) > looked) break;
+  const header = rows.shift();
+  if (header === undefined || header.length < 2 || rows.length === 0 || options.header === false)
+    return undefined;
+  if (options.decimal === "," || rows.some((cells) => cells.length !== header.length)) return undefined;
+  const forms = header.map((_, at) => formOf(rows, at, delimiter));
+  if (forms.includes(undefined) || header.every((cell) => decimalSignOf(cell) !== undefined))
+    return undefined;
+  const found: string[] = [];
+  const names = columnNames(header, found);
+  const columns = await typedRead(path, delimiter, forms as PlainForm[]).catch(() => undefined);
+  return columns === undefined ? undefined : { names, columns, found };
+}
+
+/** Undefined when the column holds anything that must be looked at cell by cell. */
+function formOf(rows: readonly (readonly string[])[], at: number, delimiter: string): PlainForm | undefined {
+  let numbers = 0;
+  let texts = 0;
+  for (const cells of rows) {
+    const cell = cells[at]!;
+    if (cell === "") continue;
+    const sign = decimalSignOf(cell);
+    if (sign === undefined) texts++;
+    else if (isPlain(cell, sign, delimiter)) numbers++;
+    else return undefined;
+    if (sign === undefined && (dateOrdersOf(cell) ?? plainDate(cell)) !== undefined) return undefined;
+  }
+  if (numbers > 0) return texts > 0 ? undefined : "number";
+  return texts > 0 ? "text" : undefined;
+}
+
+/** Digits with a point, as the engine reads them; "1.234" is plain only where commas separate the cells. */
+function isPlain(cell: string, sign: string, delimiter: string): boolean {
+  if (/[^\d.eE+-]/.test(cell) || (isNegative(cell) && !cell.startsWith("-"))) return false;
+  return sign === "." || sign === "none" || (sign === "either" && delimiter === ",");
+}
+
+async function typedRead(
+  path: string,
+  delimiter: string,
+  forms: readonly PlainForm[],
+): Promise<readonly Column[]> {
+  const types = forms.map((form, i) => `'c${i}': '${form === "number" ? "DOUBLE" : "VARCHAR"}'`).join(", ");
+  // Without empty cells a vector of numbers is read without asking each item whether it is there.
+  const selected = forms.map((form, i) => (form === "number" ? `coalesce(c${i}, 'nan'::DOUBLE)` : `c${i}`));
+  const query =
+    `SELECT ${selected.join(", ")} FROM read_csv(${quoted(path)}, auto_detect = false, header = true, ` +
+    `delim = ${quoted(delimiter)}, quote = '"', escape = '"', strict_mode = true, null_padding = false, ` +
+    `allow_quoted_nulls = false, nullstr = '', columns = {${types}})`;
+  return withDatabase(async (connection) => {
+    const result = await connection.run(query);
+    const chunks = await result.fetchAllChunks();
+    const rows = chunks.reduce((sum, chunk) => sum + chunk.rowCount, 0);
+    const columns = forms.map(
+      (form, i): Column =>
+        form === "number" ? exactNumbers(numbersOf(chunks, i, rows)) : cellsOf(chunks, i, String),
+    );
+    if (rows === 0 || columns.some((column) => column[rows - 1] === null)) throw new Error("an empty tail");
+    return columns;
+  });
+}
+
+/** A whole number past 2^53 may have lost digits on the way: such a column is text and is read cell by cell. */
+function exactNumbers(values: Float64Array): Float64Array {
+  for (const value of values)
+    if (Math.abs(value) >= Number.MAX_SAFE_INTEGER) throw new Error("a number too long to keep");
+  return values;
+}
