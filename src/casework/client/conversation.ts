@@ -69,22 +69,27 @@ function ask(
   onOutput: (message: Message) => void = () => undefined,
 ): Promise<Message> {
   return new Promise((resolve) => {
-    let reply: Message | undefined;
-    let idle = false;
-    const id = client.send("shell", type, content);
+    const replyTo = finishedReply(client.send("shell", type, content));
     const stop = client.hear((channel, message) => {
       // Outputs are passed on whoever they belong to: a display of an earlier cell may be replaced now.
       if (channel === "iopub") onOutput(message);
-      if (message.parent.msg_id !== id) return;
-      if (channel === "shell") reply = message;
-      if (isIdle(message)) idle = true;
-      if (reply === undefined || !idle) return;
+      const reply = replyTo(message);
+      if (reply === undefined) return;
       stop();
       resolve(reply);
     });
   });
 }
 
-function isIdle({ header, content }: Message): boolean {
-  return header.msg_type === "status" && content["execution_state"] === "idle";
+/** Takes messages and gives the reply to a request once the kernel has also said that it is idle. */
+function finishedReply(id: string): (message: Message) => Message | undefined {
+  let reply: Message | undefined;
+  let idle = false;
+  return (message) => {
+    const { header, parent, content } = message;
+    if (parent.msg_id !== id) return undefined;
+    if (header.msg_type.endsWith("_reply")) reply = message;
+    if (header.msg_type === "status" && content["execution_state"] === "idle") idle = true;
+    return idle ? reply : undefined;
+  };
 }

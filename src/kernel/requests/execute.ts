@@ -1,6 +1,7 @@
 import { cellName } from "../cells/cell-name.js";
 import type { CellOutcome } from "../cells/cell-session.js";
 import { errorReport } from "../cells/traceback.js";
+import { stringErrors } from "../language/string-errors.js";
 import { outputQueue } from "../output/output-queue.js";
 import { type Run, runAs } from "../output/run.js";
 import { valueBundle } from "../output/value-bundle.js";
@@ -69,7 +70,9 @@ async function answered(
   const session = kernel.session();
   kernel.interrupts.begin(run, session.stop);
   try {
-    const outcome = await shown(await session.run(asked.code, cellName(serial), label), run, count);
+    const refused = stringErrors(session.compiler.library, kernel.languages, asked.code);
+    const done = refused ?? (await session.run(asked.code, cellName(serial), label));
+    const outcome = await shown(kernel, done, run, count);
     await output.drained();
     if (outcome.kind !== "failed") {
       const user_expressions = await evaluateExpressions(kernel, asked.expressions);
@@ -84,10 +87,17 @@ async function answered(
 }
 
 /** Publishes the value of a cell. One that fails while it shows itself fails the cell. */
-async function shown(outcome: CellOutcome, run: Run, execution_count: number): Promise<CellOutcome> {
+async function shown(
+  kernel: KernelState,
+  outcome: CellOutcome,
+  run: Run,
+  execution_count: number,
+): Promise<CellOutcome> {
   if (outcome.kind !== "value" || run.silent) return outcome;
   try {
     const data = await valueBundle(outcome.value);
+    const entry = kernel.history.at(-1);
+    if (entry?.count === execution_count) entry.result = String(data["text/plain"]);
     run.output.add("execute_result", { execution_count, data, metadata: {} });
     return outcome;
   } catch (cause) {

@@ -1,5 +1,9 @@
 import type { Message } from "../protocol/message.js";
 import { commInfo, commOpen } from "./comms.js";
+import { complete } from "./complete.js";
+import { history } from "./history.js";
+import { inspect } from "./inspect.js";
+import { isComplete } from "./is-complete.js";
 import type { KernelState } from "./kernel-state.js";
 
 /** Answers a request: the content of the reply, or nothing for messages that get none. */
@@ -7,6 +11,10 @@ export type Handler = (kernel: KernelState, request: Message) => object | undefi
 
 /** Requests other than those that the transport thread answers itself and `execute_request`, which queues. */
 export const handlers: Readonly<Record<string, Handler>> = {
+  complete_request: complete,
+  inspect_request: inspect,
+  is_complete_request: isComplete,
+  history_request: history,
   comm_info_request: commInfo,
   comm_open: (kernel, request) => {
     commOpen(kernel, request);

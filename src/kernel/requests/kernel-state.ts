@@ -24,4 +24,6 @@ export interface KernelState {
 export interface HistoryEntry {
   readonly count: number;
   readonly text: string;
+  /** The text form of its value, once it has one. */
+  result?: string;
 }

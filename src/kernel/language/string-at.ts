@@ -1,0 +1,60 @@
+import type ts from "typescript-cell";
+import type { StringLanguage } from "./string-language.js";
+
+/** A string of a cell that is written in one of the registered languages. */
+export interface LanguageString {
+  readonly language: StringLanguage;
+  /** What the cell has between the quotes. Strings with escapes or insertions are left alone. */
+  readonly text: string;
+  /** Where that begins in the cell, in UTF-16 units. */
+  readonly start: number;
+}
+
+/** All strings of a cell that are in a registered language, in order. */
+export function languageStrings(
+  library: typeof ts,
+  languages: readonly StringLanguage[],
+  cell: string,
+): readonly LanguageString[] {
+  if (languages.length === 0) return [];
+  const file = library.createSourceFile("cell.ts", cell, library.ScriptTarget.ES2022);
+  const found: LanguageString[] = [];
+  const visit = (node: ts.Node): void => {
+    if (library.isCallExpression(node)) {
+      for (const [index, argument] of node.arguments.entries()) {
+        const callee = node.expression.getText(file);
+        const language = languages.find((one) => one.matches(callee, index));
+        if (language !== undefined) found.push(...stringsOf(library, language, argument, file));
+      }
+    }
+    library.forEachChild(node, visit);
+  };
+  visit(file);
+  return found;
+}
+
+/** The string of a registered language that the position is inside of. */
+export function stringAt(
+  library: typeof ts,
+  languages: readonly StringLanguage[],
+  cell: string,
+  position: number,
+): LanguageString | undefined {
+  return languageStrings(library, languages, cell).find(
+    ({ start, text }) => start <= position && position <= start + text.length,
+  );
+}
+
+function stringsOf(
+  library: typeof ts,
+  language: StringLanguage,
+  argument: ts.Expression,
+  file: ts.SourceFile,
+): readonly LanguageString[] {
+  if (!library.isStringLiteralLike(argument)) return [];
+  const start = argument.getStart(file) + 1;
+  // A string still being typed has no closing quote yet.
+  const closed = argument.end - start >= argument.text.length + 1;
+  const text = file.text.slice(start, closed ? argument.end - 1 : argument.end);
+  return text === argument.text ? [{ language, text, start }] : [];
+}

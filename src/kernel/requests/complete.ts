@@ -1,0 +1,46 @@
+import { stringAt } from "../language/string-at.js";
+import type { Message } from "../protocol/message.js";
+import { toCodePoints } from "./code-points.js";
+import { type Cursor, cursorOf } from "./cursor.js";
+import type { KernelState } from "./kernel-state.js";
+
+/** What may stand between `start` and `end` (UTF-16 units), each with its kind. */
+interface Offers {
+  readonly start: number;
+  readonly end: number;
+  readonly items: readonly { readonly text: string; readonly kind: string }[];
+}
+
+/** @see Jupyter messaging, "Completion"; the kinds travel in the metadata field that front ends read them from. */
+export function complete(kernel: KernelState, request: Message): object {
+  const cursor = cursorOf(request);
+  const { start, end, items } = offersInString(kernel, cursor) ?? offersInCode(kernel, cursor);
+  const cursor_start = toCodePoints(cursor.text, start);
+  const cursor_end = toCodePoints(cursor.text, end);
+  const kinds = items.map(({ text, kind }) => ({ text, type: kind, start: cursor_start, end: cursor_end }));
+  return {
+    status: "ok",
+    matches: items.map(({ text }) => text),
+    cursor_start,
+    cursor_end,
+    metadata: { _jupyter_types_experimental: kinds },
+  };
+}
+
+function offersInString(kernel: KernelState, { text, position }: Cursor): Offers | undefined {
+  const found = stringAt(kernel.session().compiler.library, kernel.languages, text, position);
+  if (found === undefined) return undefined;
+  const offers = found.language.complete(found.text, position - found.start);
+  return { start: offers.start + found.start, end: offers.end + found.start, items: offers.items };
+}
+
+function offersInCode(kernel: KernelState, { text, position }: Cursor): Offers {
+  const session = kernel.session();
+  const { start, end, candidates, original } = session.compiler.complete(
+    session.declarations(),
+    text,
+    position,
+  );
+  const kinds = new Map((original?.entries ?? []).map((entry) => [entry.name, entry.kind as string]));
+  return { start, end, items: candidates.map((name) => ({ text: name, kind: kinds.get(name) ?? "name" })) };
+}

@@ -1,0 +1,55 @@
+import type ts from "typescript-cell";
+import { stringAt } from "../language/string-at.js";
+import type { Message } from "../protocol/message.js";
+import { type Cursor, cursorOf } from "./cursor.js";
+import { enclosingCallee } from "./enclosing-callee.js";
+import type { KernelState } from "./kernel-state.js";
+
+/** @see Jupyter messaging, "Introspection". */
+export function inspect(kernel: KernelState, request: Message): object {
+  const cursor = cursorOf(request);
+  const deep = request.content["detail_level"] === 1;
+  const markdown = aboutString(kernel, cursor) ?? aboutCode(kernel, cursor, deep);
+  if (markdown === undefined) return { status: "ok", found: false, data: {}, metadata: {} };
+  const data = { "text/markdown": markdown, "text/plain": markdown.replace(/^```.*\n/gm, "") };
+  return { status: "ok", found: true, data, metadata: {} };
+}
+
+function aboutString(kernel: KernelState, { text, position }: Cursor): string | undefined {
+  const found = stringAt(kernel.session().compiler.library, kernel.languages, text, position);
+  return found?.language.inspect(found.text, position - found.start);
+}
+
+function aboutCode(kernel: KernelState, { text, position }: Cursor, deep: boolean): string | undefined {
+  const { compiler, declarations } = kernel.session();
+  const places = [position, position - 1, enclosingCallee(compiler.library, text, position)];
+  for (const place of places) {
+    if (place === undefined || place < 0) continue;
+    const info = compiler.inspect(declarations(), text, place);
+    if (info?.displayParts?.length) return markdownOf(info as ts.QuickInfo, deep);
+  }
+  return undefined;
+}
+
+const plainTags = ["param", "returns"];
+
+/** Type, docstring and tags; errors, sources and examples only when asked for more. */
+function markdownOf({ displayParts, documentation, tags }: ts.QuickInfo, deep: boolean): string {
+  const told = (tags ?? []).filter(({ name }) => deep || plainTags.includes(name));
+  const parts = [
+    `\`\`\`typescript\n${joined(displayParts)}\n\`\`\``,
+    joined(documentation),
+    ...told.map(tagMarkdown),
+  ];
+  return parts.filter((part) => part !== "").join("\n\n");
+}
+
+function tagMarkdown({ name, text }: ts.JSDocTagInfo): string {
+  const told = joined(text);
+  if (name === "example") return `*example*\n\`\`\`typescript\n${told}\n\`\`\``;
+  return `*${name}* ${told}`;
+}
+
+function joined(parts: readonly ts.SymbolDisplayPart[] | undefined): string {
+  return (parts ?? []).map(({ text }) => text).join("");
+}
