@@ -9,7 +9,7 @@ import {
 } from "../../src/estimate/index.js";
 import type { Observations } from "../../src/record/index.js";
 import type { Rule } from "../../src/rule/index.js";
-import { type Figure, figure } from "../figures/index.js";
+import { type Figure, fittedFigure, profileFigure } from "../figures/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { shownTogether } from "./shown-together.js";
@@ -27,7 +27,9 @@ export function fit(rule: Rule, observations: Observations, options: FitOptions)
   caseLog.noteStep(
     `fit "${rule.text}" with errors: ${options.errors}, spread: ${options.spread ?? "constant"}`,
   );
-  return showing({ ...fitted }, () => shownTogether([estimatesTable(fitted), fittedFigure(fitted)]));
+  return showing({ ...fitted }, () =>
+    shownTogether([estimatesTable(fitted), ...observedAndFitted(fitted), profiles(fitted)]),
+  );
 }
 
 function estimatesTable(fitted: Fit): Table {
@@ -88,23 +90,44 @@ function warningsOf(fitted: Fit): string[] {
   return all.map((message) => `Caution: ${message}`);
 }
 
-function fittedFigure(fitted: Fit): Figure {
+function observedAndFitted(fitted: Fit): Figure[] {
   const { period, states } = fitted.observations;
   const x = { title: period.column, unit: period.unit };
-  const panels = fitted.groups.flatMap((group) =>
-    states.map((state) => {
-      const points = group.points.filter((point) => point.state === state.name);
-      const time = points.map((point) => point.time);
-      return {
-        title: group.group,
-        x,
-        y: { title: state.name, unit: state.unit },
-        layers: [
-          { mark: "line", name: "fitted", x: time, y: points.map((point) => point.fitted) } as const,
-          { mark: "points", name: "observed", x: time, y: points.map((point) => point.observed) } as const,
-        ],
-      };
+  return states.map((state) =>
+    fittedFigure({
+      title: `Observed and fitted: ${fitted.rule.text}`,
+      x,
+      y: { title: state.name, unit: state.unit },
+      series: fitted.groups.map((group) => {
+        const points = group.points.filter((point) => point.state === state.name);
+        const time = points.map((point) => point.time);
+        return {
+          name: group.group,
+          observed: { name: "observed", x: time, y: points.map((point) => point.observed) },
+          fitted: [{ name: "fitted", x: time, y: points.map((point) => point.fitted) }],
+        };
+      }),
     }),
   );
-  return figure({ title: `Observed and fitted: ${fitted.rule.text}`, panels });
+}
+
+/** Profiles of every constant; of one group, because a figure of many profiles is read by nobody. */
+function profiles(fitted: Fit): Figure | undefined {
+  const [group] = fitted.groups;
+  if (group === undefined || fitted.groups.length > 1) return undefined;
+  return profileFigure({
+    title: "Profiles of the constants",
+    measure: "Rise of the sum of squares / sigma²",
+    cut: group.cut,
+    level: `${100 * (fitted.options.level ?? 0.95)}%`,
+    profiles: group.estimates.map(({ name, unit, value, profile, trace }) => ({
+      constant: name,
+      unit,
+      held: trace.map((place) => place.value),
+      worsening: trace.map((place) => place.increase),
+      estimate: value,
+      lower: profile.lower,
+      upper: profile.upper,
+    })),
+  });
 }

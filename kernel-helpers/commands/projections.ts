@@ -5,7 +5,7 @@ import {
   forecast as forecastFit,
   type GroupForecast,
 } from "../../src/projection/index.js";
-import { type Figure, figure, type Layer, type Panel } from "../figures/index.js";
+import { type Figure, fanFigure, type ProjectedSeries } from "../figures/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { shownTogether } from "./shown-together.js";
@@ -22,46 +22,35 @@ export function forecast(fit: Fit, options: ForecastOptions): Forecast {
   caseLog.noteStep(
     `forecast "${fit.rule.text}" over ${options.periods} periods, ${ahead.options.paths} paths`,
   );
-  return showing({ ...ahead }, () => shownTogether([fanChart(ahead), aheadTable(ahead)]));
+  return showing({ ...ahead }, () => shownTogether([...fanCharts(ahead), aheadTable(ahead)]));
 }
 
-function fanChart(ahead: Forecast): Figure {
-  const { observations } = ahead.fit;
-  const panels = ahead.groups.flatMap((group) =>
-    group.states.map(
-      (state, s): Panel => ({
-        title: group.group,
-        x: { title: observations.period.column, unit: observations.period.unit },
-        y: { title: state.state, unit: state.unit },
-        layers: layersOf(ahead, group, s),
-      }),
-    ),
+function fanCharts(ahead: Forecast): Figure[] {
+  const { observations, rule } = ahead.fit;
+  return observations.states.map((state) =>
+    fanFigure({
+      title: `Forecast of ${rule.text}`,
+      x: { title: observations.period.column, unit: observations.period.unit },
+      y: { title: state.name, unit: state.unit },
+      series: ahead.groups.map((group) => projected(ahead, group, state.name)),
+      notes: notesOf(ahead),
+    }),
   );
-  return figure({ title: `Forecast of ${ahead.fit.rule.text}`, panels, notes: notesOf(ahead) });
 }
 
-function layersOf(ahead: Forecast, group: GroupForecast, place: number): Layer[] {
-  const state = group.states[place]!;
+function projected(ahead: Forecast, group: GroupForecast, name: string): ProjectedSeries {
+  const state = group.states.find((each) => each.state === name)!;
   const recorded = ahead.fit.observations.groups.find((each) => each.name === group.group)!;
-  const bands = state.bands
-    .filter((band) => band.kind === "future observation")
-    .sort((a, b) => b.level - a.level)
-    .map(
-      (band, nested): Layer => ({
-        mark: "band",
-        name: `${100 * band.level}% future observation`,
-        x: group.time,
-        lower: band.lower,
-        upper: band.upper,
-        nested,
-      }),
-    );
-  return [
-    ...bands,
-    { mark: "line", name: "fitted path", x: group.time, y: state.central },
-    { mark: "points", name: "recorded", x: recorded.time, y: recorded.values[state.state]! },
-    { mark: "vertical", name: "record ends", x: group.time[group.index.indexOf(group.recordEnd)]! },
-  ];
+  const x = group.time;
+  return {
+    name: group.group,
+    recorded: { name: "recorded", x: recorded.time, y: recorded.values[name]! },
+    central: { name: "fitted path", x, y: state.central },
+    bands: state.bands
+      .filter((band) => band.kind === "future observation")
+      .map(({ level, kind, lower, upper }) => ({ level, of: kind, x, lower, upper })),
+    recordEnd: x[group.index.indexOf(group.recordEnd)]!,
+  };
 }
 
 function aheadTable(ahead: Forecast): Table {
