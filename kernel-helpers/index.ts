@@ -1,5 +1,14 @@
 export type { Reach, ReachOptions } from "../src/decision/index.js";
-export type { Estimate, Fit, FitOptions, GroupFit, Interval } from "../src/estimate/index.js";
+export {
+  type Estimate,
+  estimates,
+  type Fit,
+  type FitOptions,
+  type GroupFit,
+  type Interval,
+  points,
+  summary,
+} from "../src/estimate/index.js";
 export type { Comparison } from "../src/evidence/index.js";
 export { leastSquares, ModelError } from "../src/numeric/index.js";
 export type { Forecast, ForecastOptions } from "../src/projection/index.js";
@@ -10,6 +19,7 @@ export { compare } from "./commands/comparisons.js";
 export { reaches } from "./commands/decisions.js";
 export { fit } from "./commands/fits.js";
 export { forecast } from "./commands/projections.js";
+export { differences, observations, readRecord } from "./commands/records.js";
 export { type RecurrenceOptions, type Rule, recurrence } from "./commands/rules.js";
 export { show } from "./commands/show.js";
 export { type Figure, type FigureOptions, figure } from "./figures/index.js";
