@@ -20,7 +20,7 @@ export function rotateRowIn(
     if (below === 0) continue;
     const at = k * width + k;
     const above = triangle[at]!;
-    const length = Math.hypot(above, below);
+    const length = Math.sqrt(above * above + below * below);
     const cosine = above / length;
     const sine = below / length;
     triangle[at] = length;

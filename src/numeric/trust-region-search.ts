@@ -50,14 +50,22 @@ export function settle(problem: SearchProblem, at: Search): StopReason | undefin
   if (bounds !== undefined) {
     at.count = holdAtBounds(workspace, system.triangle, system.projected, at.constants, bounds);
   } else {
-    workspace.triangle.set(system.triangle);
-    workspace.projected.set(system.projected);
-    workspace.freeScale.set(workspace.scale);
+    takeAll(workspace, system);
     at.count = system.size;
   }
   return offset(workspace, at.count) <= problem.gradientTolerance * Math.sqrt(at.sum)
     ? byGradient
     : undefined;
+}
+
+/** Copies entry by entry: for so few, calling `set` costs more than the copy. */
+function takeAll(workspace: SquaresWorkspace, system: LinearisedSystem): void {
+  const { size } = workspace;
+  for (let i = 0; i < size; i++) {
+    workspace.projected[i] = system.projected[i]!;
+    workspace.freeScale[i] = workspace.scale[i]!;
+    for (let j = i; j < size; j++) workspace.triangle[i * size + j] = system.triangle[i * size + j]!;
+  }
 }
 
 /** Tries one step, and moves there when the sum of squares falls enough; says whether the search is over. */
@@ -94,7 +102,7 @@ function refine(
 }
 
 function move(problem: SearchProblem, at: Search, sum: number): StopReason | undefined {
-  at.constants.set(problem.workspace.trial);
+  for (let j = 0; j < at.constants.length; j++) at.constants[j] = problem.workspace.trial[j]!;
   at.sum = sum;
   at.iterations++;
   return settle(problem, at);
@@ -107,7 +115,7 @@ function findStep(problem: SearchProblem, at: Search): void {
     return;
   }
   at.damping = trustRegionStep(workspace, at.count, at.radius, at.damping);
-  workspace.step.set(workspace.freeStep);
+  for (let j = 0; j < workspace.size; j++) workspace.step[j] = workspace.freeStep[j]!;
 }
 
 function changeRadius(

@@ -23,6 +23,24 @@ export interface SensitivityParts {
   readonly moved: readonly string[];
 }
 
+/** The line that works out one sensitivity in the next period; terms that are always zero are left out. */
+function nextLine(
+  rule: RuleGraph,
+  pattern: readonly (readonly boolean[])[],
+  program: EmittedProgram,
+  { slot, unknown }: SensitivityCell,
+): string {
+  const { byState, byConstant } = stepDerivatives(rule);
+  const slopes = byState[slot]!.map(program.read);
+  const terms = slopes.flatMap((slope, k) => {
+    if (slope === "0" || !pattern[k]![unknown]) return [];
+    return [slope === "1" ? `d${k}_${unknown}` : `${slope} * d${k}_${unknown}`];
+  });
+  const own = unknown < rule.constants ? program.read(byConstant[slot]![unknown]!) : "0";
+  if (own !== "0") terms.push(own);
+  return `const e${slot}_${unknown} = ${terms.length === 0 ? "0" : terms.join(" + ")};`;
+}
+
 /** Recurrence of the sensitivities: d x' / d p = sum over states (d f / d x)(d x / d p) + d f / d p. */
 export function sensitivityParts(rule: RuleGraph): SensitivityParts {
   const { byState, byConstant } = stepDerivatives(rule);
@@ -38,24 +56,13 @@ export function sensitivityParts(rule: RuleGraph): SensitivityParts {
     })),
   );
   const live = cells.filter((cell) => cell.live);
-  const next = ({ slot, unknown }: SensitivityCell): string => {
-    const terms: string[] = [];
-    for (let k = 0; k < rule.states; k++) {
-      const source = program.read(byState[slot]![k]!);
-      if (source === "0" || !pattern[k]![unknown]) continue;
-      terms.push(source === "1" ? `d${k}_${unknown}` : `${source} * d${k}_${unknown}`);
-    }
-    const own = unknown < rule.constants ? program.read(byConstant[slot]![unknown]!) : "0";
-    if (own !== "0") terms.push(own);
-    return `const e${slot}_${unknown} = ${terms.join(" + ")};`;
-  };
   return {
     program,
     cells,
     declared: live.map(
       ({ slot, unknown }) => `let d${slot}_${unknown} = ${unknown === rule.constants + slot ? 1 : 0};`,
     ),
-    next: live.map(next),
+    next: live.map((cell) => nextLine(rule, pattern, program, cell)),
     moved: live.map(({ slot, unknown }) => `d${slot}_${unknown} = e${slot}_${unknown};`),
   };
 }
