@@ -1,15 +1,13 @@
 import type { DifferenceSeries, Differences } from "../../src/record/index.js";
-import { type Figure, figure, type Layer, type Panel } from "../figures/index.js";
+import { type ChangePairs, changeFigure, type Figure } from "../figures/index.js";
 import { type Bundle, type Column, type Table, table } from "../tables/index.js";
-import { countsSentence, findingsTable, periodSentence } from "./findings-table.js";
+import { countsSentence, findingsList, periodSentence } from "./findings-list.js";
 import { shownTogether } from "./shown-together.js";
-
-const drawn = 12;
 
 /** Shows differences: every pair, the change against the value it starts from, and what was found. */
 export function differencesBundle(differences: Differences): Promise<Bundle> {
-  const findings = findingsTable(differences.observations.findings);
-  return shownTogether([pairsTable(differences), changeFigure(differences), ...(findings ? [findings] : [])]);
+  const findings = findingsList(differences.observations.findings);
+  return shownTogether([pairsTable(differences), ...changeFigures(differences), findings]);
 }
 
 function pairsTable(differences: Differences): Table {
@@ -36,8 +34,8 @@ function pairsTable(differences: Differences): Table {
       number("present", "Value", unit),
       number("next", "Next", unit),
       number("change", "Change", unit),
-      number("ratio", "Ratio"),
-      number("perHead", "Change per value"),
+      { ...number("ratio", "Ratio"), digits: 6 },
+      { ...number("perHead", "Change per value"), digits: 5 },
       ...(plain ? [] : [number("difference", "Difference", per === "step" ? unit : "")]),
     ],
     rows: series.flatMap((pairs) => Array.from(pairs.index.keys(), (i) => pairRow(pairs, i))),
@@ -66,65 +64,41 @@ function pairRow(pairs: DifferenceSeries, i: number): Record<string, unknown> {
 }
 
 /** The two scatters asked for before any model: change against value, and change per value against value. */
-function changeFigure({ observations, series }: Differences): Figure {
-  const { step } = observations.period;
-  const panels = observations.states.flatMap((state): Panel[] => {
-    const pairs = series.filter((one) => one.state === state.name).slice(0, drawn);
+function changeFigures({ observations, series }: Differences): readonly Figure[] {
+  const { every, of } = observations.period.step;
+  const per = every === 1 ? `per ${of}` : `per ${every} ${of}`;
+  return observations.states.flatMap((state) => {
+    const pairs = series.filter((one) => one.state === state.name);
     const value = { title: state.name, unit: state.unit };
-    const every = `${step.every} ${step.of}`;
-    const per = state.unit === "" ? `per ${every}` : `${state.unit} per ${every}`;
+    const unit = state.unit === "" ? per : `${state.unit} ${per}`;
     return [
-      {
-        title: "Change",
-        x: value,
-        y: { title: `Change of ${state.name}`, unit: per },
-        layers: scatter(pairs, "change"),
-      },
-      {
-        title: "Change per value",
-        x: value,
-        y: { title: "Change per value", unit: `per ${every}` },
-        layers: scatter(pairs, "perHead"),
-      },
+      changeFigure({
+        title: "Change against value",
+        value,
+        change: { title: `Change of ${state.name}`, unit },
+        pairs: scatter(pairs, "change"),
+        notes: ["Hollow marks are pairs over several steps, drawn at their mean change a step."],
+      }),
+      changeFigure({
+        title: "Change per value against value",
+        value,
+        change: { title: "Change per value", unit: per },
+        pairs: scatter(pairs, "perHead"),
+      }),
     ];
   });
-  const left =
-    observations.groups.length > drawn
-      ? [`The first ${drawn} of ${observations.groups.length} series are drawn.`]
-      : [];
-  return figure({
-    title: "Change against value",
-    panels,
-    notes: ["Hollow marks are pairs of more than one step, drawn at their whole change.", ...left],
-  });
 }
 
-function scatter(series: readonly DifferenceSeries[], of: "change" | "perHead"): Layer[] {
-  const layers = series.flatMap((pairs, style) => [
-    points(pairs, of, style, (steps) => steps === pairs.steps.reduce((a, b) => Math.min(a, b)), "plain"),
-    points(pairs, of, style, (steps) => steps > pairs.steps.reduce((a, b) => Math.min(a, b)), "open"),
-  ]);
-  return [...layers.filter((layer) => layer !== undefined), { mark: "threshold", name: "no change", y: 0 }];
-}
-
-function points(
-  pairs: DifferenceSeries,
-  of: "change" | "perHead",
-  style: number,
-  takes: (steps: number) => boolean,
-  look: "plain" | "open",
-): Layer | undefined {
-  const places = Array.from(pairs.index.keys()).filter(
-    (i) => takes(pairs.steps[i]!) && Number.isFinite(pairs[of][i]!),
+/** Pairs of one step, and apart from them those of several, at the mean of their steps. */
+function scatter(series: readonly DifferenceSeries[], of: "change" | "perHead"): readonly ChangePairs[] {
+  const pairs = series.flatMap((one) =>
+    Array.from(one.steps, (steps, i) => ({ steps, value: one.present[i]!, change: one[of][i]! / steps })),
   );
-  if (places.length === 0) return undefined;
-  const own = pairs.group === "" ? "pairs" : pairs.group;
-  return {
-    mark: "points",
-    name: look === "open" ? `${own}, several steps` : own,
-    style,
-    look,
-    x: places.map((i) => pairs.present[i]!),
-    y: places.map((i) => pairs[of][i]!),
-  };
+  return [false, true]
+    .map((overGap) => {
+      const own = pairs.filter(({ steps, change }) => steps > 1 === overGap && Number.isFinite(change));
+      const name = overGap ? "over several steps" : "recorded pairs";
+      return { name, value: own.map((pair) => pair.value), change: own.map((pair) => pair.change), overGap };
+    })
+    .filter(({ value }) => value.length > 0);
 }

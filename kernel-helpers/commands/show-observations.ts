@@ -1,20 +1,16 @@
 import type { Observations, ObservedGroup, ObservedState } from "../../src/record/index.js";
-import { type Figure, figure, type Layer, type Panel } from "../figures/index.js";
+import { type Figure, type FlaggedValue, recordFigure } from "../figures/index.js";
 import { type Bundle, type Table, table } from "../tables/index.js";
-import { countsSentence, findingsTable, periodSentence } from "./findings-table.js";
+import { countsSentence, findingsList, periodSentence } from "./findings-list.js";
 import { shownTogether } from "./shown-together.js";
 
-/** Series drawn by name; with more the figure says how many are left out. */
+/** Series drawn; with more the figure says how many are left out. */
 const drawn = 12;
 
 /** Shows a record: one line a series, the raw values with flagged rows marked, and what was found. */
 export function observationsBundle(observations: Observations): Promise<Bundle> {
-  const findings = findingsTable(observations.findings);
-  return shownTogether([
-    seriesTable(observations),
-    recordFigure(observations),
-    ...(findings ? [findings] : []),
-  ]);
+  const findings = findingsList(observations.findings);
+  return shownTogether([seriesTable(observations), ...recordFigures(observations), findings]);
 }
 
 function seriesTable(observations: Observations): Table {
@@ -33,7 +29,7 @@ function seriesTable(observations: Observations): Table {
           label: `${state.name}, ${word}`,
           unit: state.unit,
           kind: "number" as const,
-          digits: 6,
+          digits: 12,
         })),
       ),
     ],
@@ -60,48 +56,35 @@ function seriesRow(group: ObservedGroup, states: readonly ObservedState[]): Reco
   return row;
 }
 
-function recordFigure(observations: Observations): Figure {
-  const { groups, states, period } = observations;
-  const flagged = new Set(observations.findings.flatMap(({ row }) => (row === undefined ? [] : [row])));
+/** One figure a state: series side by side, rows that a finding names ringed. */
+function recordFigures({ groups, states, period, findings }: Observations): readonly Figure[] {
+  const why = new Map(findings.map(({ row, kind }) => [row, kind]));
   const shown = groups.slice(0, drawn);
-  const panels = states.map((state): Panel => {
-    const layers = shown.map(
-      (group): Layer => ({
-        mark: "points",
+  const notes = groups.length > drawn ? [`The first ${drawn} of ${groups.length} series are drawn.`] : [];
+  return states.map((state) =>
+    recordFigure({
+      title: "Record as read",
+      x: { title: period.column, unit: period.unit },
+      y: { title: state.name, unit: state.unit },
+      series: shown.map((group) => ({
         name: group.name === "" ? state.name : group.name,
         x: group.time,
         y: group.values[state.name]!,
-      }),
-    );
-    return {
-      title: states.length > 1 ? state.name : "",
-      x: { title: period.column, unit: period.unit },
-      y: { title: state.name, unit: state.unit },
-      layers: [...layers, ...flags(shown, state, flagged)],
-    };
-  });
-  const notes = groups.length > drawn ? [`The first ${drawn} of ${groups.length} series are drawn.`] : [];
-  return figure({ title: "Record as read", panels, notes });
+      })),
+      flagged: shown.flatMap((group) => flaggedOf(group, state, why)),
+      notes,
+    }),
+  );
 }
 
-function flags(
-  groups: readonly ObservedGroup[],
-  state: ObservedState,
-  flagged: ReadonlySet<number>,
-): Layer[] {
-  const places = groups.flatMap((group) =>
-    Array.from(group.rows.keys())
-      .filter((i) => flagged.has(group.rows[i]!))
-      .map((i) => ({ x: group.time[i]!, y: group.values[state.name]![i]! })),
-  );
-  if (places.length === 0) return [];
-  return [
-    {
-      mark: "points",
-      name: "flagged",
-      look: "flag",
-      x: places.map(({ x }) => x),
-      y: places.map(({ y }) => y),
-    },
-  ];
+function flaggedOf(
+  group: ObservedGroup,
+  { name }: ObservedState,
+  why: ReadonlyMap<number | undefined, string>,
+): readonly FlaggedValue[] {
+  return Array.from(group.rows.keys()).flatMap((i) => {
+    const kind = why.get(group.rows[i]);
+    if (kind === undefined) return [];
+    return [{ x: group.time[i]!, y: group.values[name]![i]!, why: kind.replaceAll("-", " ") }];
+  });
 }

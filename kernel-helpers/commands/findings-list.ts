@@ -1,10 +1,12 @@
 import type { Finding, Observations } from "../../src/record/index.js";
-import { type Table, table } from "../tables/index.js";
+import { oneLine, showing, table, tableHtml } from "../tables/index.js";
 
-/** What was found in a record, one line a finding; undefined when nothing was. */
-export function findingsTable(findings: readonly Finding[]): Table | undefined {
+const listed = 24;
+
+/** What was found in a record: a table in a page, whole sentences in a text; undefined when nothing was. */
+export function findingsList(findings: readonly Finding[]): object | undefined {
   if (findings.length === 0) return undefined;
-  return table({
+  const made = table({
     title: "Findings",
     columns: [
       { key: "row", label: "Row", kind: "integer" },
@@ -12,9 +14,19 @@ export function findingsTable(findings: readonly Finding[]): Table | undefined {
       { key: "done", label: "What was done", kind: "text" },
     ],
     rows: findings.map(({ row, message, done }) => ({ row, message, done })),
-    limit: 24,
+    limit: listed,
     format: { group: "" },
   });
+  const text = [
+    "Findings",
+    "",
+    ...findings.slice(0, listed).map(({ message, done }) => oneLine(`${message} Done: ${done}.`)),
+  ];
+  if (findings.length > listed) text.push(`${findings.length - listed} more findings are not listed.`);
+  return showing({ kind: "findings" }, () => ({
+    "text/html": tableHtml(made),
+    "text/plain": text.join("\n"),
+  }));
 }
 
 /** "25 rows read, 24 used, 2 flagged, 0 corrected, 1 refused." */
