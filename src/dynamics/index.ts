@@ -5,5 +5,5 @@ export type { InputValues } from "./input-columns.js";
 export type { Multiplier } from "./multiplier.js";
 export { type Path, type PathOptions, type PathStop, path } from "./path.js";
 export type { SearchRange } from "./search-range.js";
-export type { InitialValues } from "./setting.js";
+export { constantsBySlot, type InitialValues, initialVector } from "./setting.js";
 export type { Stability } from "./stability.js";
