@@ -1,3 +1,4 @@
+import { reservedWords } from "../functions.js";
 import { refuse } from "../refusals.js";
 import type { Expression } from "../syntax/expression.js";
 import { type Names, refuseUnknown } from "./names.js";
@@ -54,6 +55,10 @@ function checkInput(names: Names, at: Name): void {
 }
 
 function checkConstant(names: Names, at: Name): void {
+  if (reservedWords.has(at.name)) {
+    const wrong = `"${at.name}" is not free to be used as a name.`;
+    throw refuse("reserved-name", names.text, at, wrong, "Choose another name for it.");
+  }
   if (names.declared !== undefined && !names.declared.has(at.name)) throw refuseUnknown(names, at, at.name);
   if (at.offset !== 0) {
     const wrong = `"${at.name}" is a constant and has no value of its own in other periods.`;

@@ -3,23 +3,29 @@ import { refuse } from "../refusals.js";
 import type { Statement } from "../syntax/expression.js";
 import { checkRightSide } from "./check-expression.js";
 import type { CheckedRule, Declared } from "./checked-rule.js";
+import { appearance } from "./look-alike-letters.js";
 import { type Names, namesOf } from "./names.js";
 
-/** Names that differ by one letter are more often a slip than two constants; short symbols are exempt. */
+/** Pairs of names, the second a constant that was not declared and came later. */
+function pairsWithFree(names: Names): readonly (readonly [string, string])[] {
+  const free = names.declared === undefined ? [...names.constants.keys()] : [];
+  const set = [...names.states, ...names.quantityLines.keys(), ...names.inputs];
+  return free.flatMap((name, i) => [...set, ...free.slice(0, i)].map((other) => [other, name] as const));
+}
+
+/** Names that differ by one letter are more often a slip than two names; short symbols are exempt. */
 function lookAlikeNames(names: Names): readonly Warning[] {
-  const all = [...names.states, ...names.quantityLines.keys(), ...names.inputs, ...names.constants.keys()];
-  const free = [...names.constants.keys()];
-  if (names.declared !== undefined) return [];
-  return free.flatMap((name) =>
-    all
-      .filter((other) => other !== name && Math.min(name.length, other.length) >= 3)
-      .filter((other) => !free.includes(other) || free.indexOf(other) < free.indexOf(name))
-      .filter((other) => editDistance(name, other) === 1)
-      .map((other) => ({
-        code: "names-look-alike",
-        message: `"${name}" and "${other}" differ by one letter and are read as two names. If one is a slip, correct it; declare { constants: [...] } to have every other name refused.`,
-      })),
-  );
+  const slip = (a: string, b: string): boolean =>
+    Math.min(a.length, b.length) >= 3 && editDistance(a, b) === 1;
+  return pairsWithFree(names).flatMap(([other, name]) => {
+    const sameLook = appearance(other) === appearance(name);
+    if (!sameLook && !slip(other, name)) return [];
+    const how = sameLook
+      ? "look the same and are written with letters of two alphabets"
+      : "differ by one letter";
+    const message = `"${other}" and "${name}" ${how}; they are read as two names. If one is a slip, correct it; declare { constants: [...] } to have every other name refused.`;
+    return [{ code: "names-look-alike", message }];
+  });
 }
 
 function unused(names: Names): readonly Warning[] {

@@ -1,4 +1,5 @@
-import { ruleFunctions } from "../functions.js";
+import { ModelError } from "../../numeric/index.js";
+import { reservedWords, ruleFunctions } from "../functions.js";
 import { refuse, unknownName } from "../refusals.js";
 import type { Statement } from "../syntax/expression.js";
 import type { Span } from "../syntax/token.js";
@@ -36,11 +37,33 @@ function refuseSetInput(text: string, place: Span, name: string, kind: string): 
   );
 }
 
+const refuseReserved = (name: string): Error =>
+  new ModelError(
+    "reserved-name",
+    `"${name}" has a meaning of its own in rules. Choose another name for it.`,
+    {
+      name,
+    },
+  );
+
+const refuseTwoRoles = (name: string): Error =>
+  new ModelError(
+    "two-roles",
+    `"${name}" is declared both as a constant and as an input. Keep one of the two.`,
+    {
+      name,
+    },
+  );
+
 /** Sorts the names that lines set into states and quantities. */
 export function namesOf(text: string, statements: readonly Statement[], declared: Declared): Names {
   const states = new Set<string>();
   const quantityLines = new Map<string, number>();
   const inputs = new Set(declared.inputs);
+  for (const name of [...inputs, ...(declared.constants ?? [])]) {
+    if (reservedWords.has(name)) throw refuseReserved(name);
+    if (inputs.has(name) && declared.constants?.includes(name)) throw refuseTwoRoles(name);
+  }
   statements.forEach(({ kind, name, nameAt }, line) => {
     if (states.has(name) || quantityLines.has(name)) throw refuseSecond(text, nameAt, name);
     if (inputs.has(name)) throw refuseSetInput(text, nameAt, name, "an input");

@@ -1,4 +1,5 @@
 import {
+  contains,
   everywhere,
   hull,
   type Interval,
@@ -55,21 +56,30 @@ const power: IntervalOperation = (base, exponent) => {
   return outward(Math.min(...corners), Math.max(...corners));
 };
 
-/** Cosine: 1 where a multiple of 2 pi lies inside, -1 where an odd multiple of pi does. */
-const cos: IntervalOperation = ([low, high]) => {
-  if (!(high - low < 2 * Math.PI)) return [-1, 1];
-  const ends = [Math.cos(low), Math.cos(high)];
-  const peak = Math.ceil(low / (2 * Math.PI)) * 2 * Math.PI <= high;
-  const trough = (Math.ceil((low / Math.PI - 1) / 2) * 2 + 1) * Math.PI <= high;
-  return outward(trough ? -1 : Math.min(...ends), peak ? 1 : Math.max(...ends));
-};
+/** Whether place + a whole number of turns lies in the interval, or so close that rounding cannot tell. */
+function turnsTo(place: number, [low, high]: Interval): boolean {
+  const turn = 2 * Math.PI;
+  const slack = 1e-9 * Math.max(1, Math.abs(low), Math.abs(high));
+  return Math.ceil((low - slack - place) / turn) * turn + place <= high + slack;
+}
+
+/** Sine or cosine, which is 1 at the peak and -1 half a turn from it. */
+const wave =
+  (of: (x: number) => number, peak: number): IntervalOperation =>
+  ([low, high]) => {
+    if (!(high - low < 2 * Math.PI)) return [-1, 1];
+    const ends = [of(low), of(high)];
+    const least = turnsTo(peak + Math.PI, [low, high]) ? -1 : Math.min(...ends);
+    return outward(least, turnsTo(peak, [low, high]) ? 1 : Math.max(...ends));
+  };
 
 const tan: IntervalOperation = ([low, high]) => {
   const crosses = Math.floor(low / Math.PI + 0.5) !== Math.floor(high / Math.PI + 0.5);
   return crosses || !(high - low < Math.PI) ? everywhere : rising(Math.tan, [low, high]);
 };
 
-const mod: IntervalOperation = (x, divisor) => minus(x, times(divisor, rising(Math.floor, over(x, divisor))));
+const mod: IntervalOperation = (x, divisor) =>
+  contains(divisor, 0) ? everywhere : minus(x, times(divisor, rising(Math.floor, over(x, divisor))));
 
 /** Enclosures of every operation: the result holds the value at each point of the arguments. */
 export const intervalOperations: Readonly<Record<Operator, IntervalOperation>> = {
@@ -98,7 +108,7 @@ export const intervalOperations: Readonly<Record<Operator, IntervalOperation>> =
   ceil: (a) => rising(Math.ceil, a),
   round: (a, digits) => rising((x) => roundTo(x, digits[0]), a),
   mod,
-  sin: ([low, high], b, c) => cos([low - Math.PI / 2, high - Math.PI / 2], b, c),
-  cos,
+  sin: wave(Math.sin, Math.PI / 2),
+  cos: wave(Math.cos, 0),
   tan,
 };

@@ -19,8 +19,7 @@ export function times([a, b]: Interval, [c, d]: Interval): Interval {
 }
 
 export function over(above: Interval, [c, d]: Interval): Interval {
-  if (c === 0 && d === 0) return nowhere;
-  if (c < 0 && d > 0) return everywhere;
+  if ((c < 0 && d > 0) || (c === 0 && d === 0)) return everywhere;
   const ends: Interval = [
     d === 0 ? Number.NEGATIVE_INFINITY : 1 / d,
     c === 0 ? Number.POSITIVE_INFINITY : 1 / c,
