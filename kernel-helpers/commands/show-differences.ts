@@ -20,7 +20,7 @@ function pairsTable(differences: Differences): Table {
     label,
     unit: of,
     kind: "number",
-    digits: 6,
+    digits: 12,
   });
   const season = seasonal === undefined ? "" : `, season ${seasonal}`;
   return table({

@@ -50,22 +50,34 @@ function allOf(cells: readonly (string | null)[], holds: (cell: string) => boole
 /** The one decimal sign that the number columns of a file use. */
 function decimalOf(columns: readonly TextColumn[], delimiter: string): "." | "," {
   let settled: "." | "," | undefined;
-  let unclear: { row: number; name: string; cell: string } | undefined;
-  for (const { name, cells } of columns) {
-    for (let i = 0; i < cells.length; i++) {
-      const cell = cells[i];
-      if (cell === null || cell === undefined || cell.trim() === "") continue;
-      const sign = decimalSignOf(cell);
-      if (sign === "either") unclear ??= { row: i + 1, name, cell };
-      if (sign !== "." && sign !== ",") continue;
-      if (settled !== undefined && sign !== settled) throw decimalSignUnclear(i + 1, name, cell);
-      settled = sign;
-    }
+  let unclear: SignedCell | undefined;
+  for (const signed of signedCells(columns)) {
+    if (signed.sign === "either") unclear ??= signed;
+    else if (settled === undefined) settled = signed.sign;
+    else if (signed.sign !== settled) throw decimalSignUnclear(signed.row, signed.name, signed.cell);
   }
   // Where cells are separated by commas the writer's decimal sign is the point: a decimal comma would need
   // every number quoted. (Common practice of spreadsheet programs, no source.)
   if (settled !== undefined || unclear === undefined || delimiter === ",") return settled ?? ".";
   throw decimalSignUnclear(unclear.row, unclear.name, unclear.cell);
+}
+
+interface SignedCell {
+  readonly row: number;
+  readonly name: string;
+  readonly cell: string;
+  readonly sign: "." | "," | "either";
+}
+
+/** The cells of number columns that hold a comma or a point. */
+function* signedCells(columns: readonly TextColumn[]): Generator<SignedCell> {
+  for (const { name, cells } of columns) {
+    for (let i = 0; i < cells.length; i++) {
+      const cell = cells[i] ?? "";
+      const sign = decimalSignOf(cell);
+      if (sign !== undefined && sign !== "none") yield { row: i + 1, name, cell, sign };
+    }
+  }
 }
 
 function numbersOf(text: TextColumn, decimal: "." | ",", found: string[]): Float64Array | undefined {

@@ -17,25 +17,39 @@ export function* csvRecords(text: string, delimiter: string): Generator<CsvRecor
   let at = text.startsWith("\ufeff") ? 1 : 0;
   let line = 1;
   while (at < text.length) {
-    const begun = line;
-    const cells: string[] = [];
-    let ended = false;
-    while (!ended) {
-      const quoted = text[at] === '"';
-      const stop = quoted ? endOfQuoted(text, at) : endOfPlain(text, at, delimiter);
-      if (stop < 0) return { unendedQuoteAt: line };
-      const cell = quoted ? text.slice(at + 1, stop - 1).replaceAll('""', '"') : text.slice(at, stop);
-      if (quoted) line += cell.match(/\r\n|\r|\n/g)?.length ?? 0;
-      cells.push(cell);
-      at = stop;
-      if (text[at] === delimiter) at++;
-      else ended = true;
-    }
-    at += text.startsWith("\r\n", at) ? 2 : 1;
-    line++;
-    if (cells.length > 1 || cells[0] !== "") yield { cells, line: begun };
+    const read = recordAt(text, at, delimiter);
+    if (read === undefined) return { unendedQuoteAt: line };
+    const { cells, next, breaks } = read;
+    if (cells.length > 1 || cells[0] !== "") yield { cells, line };
+    line += breaks + 1;
+    at = next;
   }
   return undefined;
+}
+
+/** The record that begins at a place: its cells, where the next one begins, and the line breaks inside cells. */
+function recordAt(
+  text: string,
+  from: number,
+  delimiter: string,
+): { cells: string[]; next: number; breaks: number } | undefined {
+  const cells: string[] = [];
+  let at = from;
+  let breaks = 0;
+  for (;;) {
+    const stop = text[at] === '"' ? endOfQuoted(text, at, delimiter) : endOfPlain(text, at, delimiter);
+    if (stop < 0) return undefined;
+    const cell = text.slice(at, stop);
+    cells.push(unquoted(cell));
+    breaks += cell.match(/\r\n|\r|\n/g)?.length ?? 0;
+    if (text[stop] !== delimiter)
+      return { cells, next: stop + (text.startsWith("\r\n", stop) ? 2 : 1), breaks };
+    at = stop + 1;
+  }
+}
+
+function unquoted(cell: string): string {
+  return cell.startsWith('"') ? cell.slice(1, -1).replaceAll('""', '"') : cell;
 }
 
 function endOfPlain(text: string, from: number, delimiter: string): number {
@@ -48,13 +62,17 @@ function endOfPlain(text: string, from: number, delimiter: string): number {
   return at;
 }
 
-/** Place after the closing quote, or -1. What follows a closing quote up to the delimiter is refused as open. */
-function endOfQuoted(text: string, from: number): number {
+/** Place after the closing quote, or -1 when there is none or text stands behind it. */
+function endOfQuoted(text: string, from: number, delimiter: string): number {
   let at = from + 1;
   for (;;) {
     at = text.indexOf('"', at);
     if (at < 0) return -1;
-    if (text[at + 1] !== '"') return at + 1;
+    if (text[at + 1] !== '"') return ends(text, at + 1, delimiter) ? at + 1 : -1;
     at += 2;
   }
+}
+
+function ends(text: string, at: number, delimiter: string): boolean {
+  return at >= text.length || text[at] === delimiter || text[at] === "\n" || text[at] === "\r";
 }

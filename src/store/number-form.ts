@@ -15,12 +15,14 @@ const groupedThenComma = /^\d{1,3}(?:[. '\u00a0\u202f\u2019]\d{3})+(?:,\d*)?$/;
  */
 export function decimalSignOf(cell: string): DecimalSign | undefined {
   const bare = bareDigits(cell);
-  if (bare === undefined || /^0\d/.test(bare)) return undefined;
-  if (digits.test(bare)) return bare.length > 15 ? undefined : "none";
-  const asPoint = /\d/.test(bare) && (point.test(bare) || groupedThenPoint.test(bare));
-  const asComma = /\d/.test(bare) && (comma.test(bare) || groupedThenComma.test(bare));
+  // A leading zero means a code, a digit must be there, and no double keeps every sixteen-digit whole number.
+  if (bare === undefined || /^0\d/.test(bare) || !/\d/.test(bare) || /^\d{16,}$/.test(bare)) return undefined;
+  if (digits.test(bare)) return "none";
+  const asPoint = point.test(bare) || groupedThenPoint.test(bare);
+  const asComma = comma.test(bare) || groupedThenComma.test(bare);
   if (asPoint && asComma) return settledBy(bare);
-  return asPoint ? "." : asComma ? "," : undefined;
+  if (asPoint) return ".";
+  return asComma ? "," : undefined;
 }
 
 /** "0.123" and "1234.567" cannot be groups of thousands; "1.234" can, and "12 345" has no decimals at all. */

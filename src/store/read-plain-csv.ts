@@ -1,9 +1,9 @@
-import type { Column } from "../record/index.js";
+import { type Column, isEmpty } from "../record/index.js";
 import { columnNames } from "./column-names.js";
 import { csvRecords } from "./csv-records.js";
 import { cellsOf, numbersOf, quoted, withDatabase } from "./database.js";
 import { dateOrdersOf, plainDate } from "./date-form.js";
-import { decimalSignOf, isNegative } from "./number-form.js";
+import { decimalSignOf } from "./number-form.js";
 import type { ReadColumns } from "./read-csv.js";
 import type { ReadOptions } from "./read-options.js";
 
@@ -32,31 +32,24 @@ export async function readPlainCsv(
     return undefined;
   const found: string[] = [];
   const names = columnNames(header, found);
+  // Whatever the engine refuses is read again where the reason can be told with row, column and value.
   const columns = await typedRead(path, delimiter, forms as PlainForm[]).catch(() => undefined);
   return columns === undefined ? undefined : { names, columns, found };
 }
 
 /** Undefined when the column holds anything that must be looked at cell by cell. */
 function formOf(rows: readonly (readonly string[])[], at: number, delimiter: string): PlainForm | undefined {
-  let numbers = 0;
-  let texts = 0;
-  for (const cells of rows) {
-    const cell = cells[at]!;
-    if (cell === "") continue;
-    const sign = decimalSignOf(cell);
-    if (sign === undefined) texts++;
-    else if (isPlain(cell, sign, delimiter)) numbers++;
-    else return undefined;
-    if (sign === undefined && (dateOrdersOf(cell) ?? plainDate(cell)) !== undefined) return undefined;
-  }
-  if (numbers > 0) return texts > 0 ? undefined : "number";
-  return texts > 0 ? "text" : undefined;
+  const forms = new Set<PlainForm | undefined>();
+  for (const cells of rows) if (cells[at] !== "") forms.add(cellForm(cells[at]!, delimiter));
+  return forms.size === 1 ? [...forms][0] : undefined;
 }
 
-/** Digits with a point, as the engine reads them; "1.234" is plain only where commas separate the cells. */
-function isPlain(cell: string, sign: string, delimiter: string): boolean {
-  if (/[^\d.eE+-]/.test(cell) || (isNegative(cell) && !cell.startsWith("-"))) return false;
-  return sign === "." || sign === "none" || (sign === "either" && delimiter === ",");
+function cellForm(cell: string, delimiter: string): PlainForm | undefined {
+  const sign = decimalSignOf(cell);
+  if (sign === undefined) return (dateOrdersOf(cell) ?? plainDate(cell)) === undefined ? "text" : undefined;
+  // Digits with a point, as the engine reads them; "1.234" is plain only where commas separate the cells.
+  const plain = /^-?[\d.]+(e[+-]?\d+)?$/i.test(cell) && (sign !== "either" || delimiter === ",");
+  return plain ? "number" : undefined;
 }
 
 async function typedRead(
@@ -79,7 +72,7 @@ async function typedRead(
       (form, i): Column =>
         form === "number" ? exactNumbers(numbersOf(chunks, i, rows)) : cellsOf(chunks, i, String),
     );
-    if (rows === 0 || columns.some((column) => column[rows - 1] === null)) throw new Error("an empty tail");
+    if (rows === 0 || columns.every((column) => isEmpty(column[rows - 1]))) throw new Error("an empty tail");
     return columns;
   });
 }

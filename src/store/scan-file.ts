@@ -30,11 +30,19 @@ export async function scanFile(path: string): Promise<FileScan> {
 
 /** Where a letter of several bytes that the end cuts off begins; the whole length when none is cut off. */
 function lastWholeLetter(text: Buffer): number {
-  for (let back = 1; back <= Math.min(3, text.length); back++) {
-    const byte = text[text.length - back]!;
-    if (byte < 0x80) return text.length;
-    const needed = byte >= 0xf0 ? 4 : byte >= 0xe0 ? 3 : byte >= 0xc0 ? 2 : 0;
-    if (needed > 0) return needed > back ? text.length - back : text.length;
-  }
-  return text.length;
+  let back = 1;
+  while (back < Math.min(4, text.length) && isFollowing(text[text.length - back]!)) back++;
+  const lead = text[text.length - back] ?? 0;
+  return lettersBytes(lead) > back ? text.length - back : text.length;
+}
+
+function isFollowing(byte: number): boolean {
+  return byte >= 0x80 && byte < 0xc0;
+}
+
+/** Bytes of the letter that a byte leads, in UTF-8. */
+function lettersBytes(lead: number): number {
+  if (lead >= 0xf0) return 4;
+  if (lead >= 0xe0) return 3;
+  return lead >= 0xc0 ? 2 : 1;
 }

@@ -1,0 +1,228 @@
+import { mkdtempSync, rmSync, writeFileSync } from "node:fs";
+import { tmpdir } from "node:os";
+import { join } from "node:path";
+import { afterAll, beforeAll, describe, expect, test } from "vitest";
+import { type ReadOptions, readTable, type StoredTable } from "../../src/store/index.js";
+
+let folder = "";
+beforeAll(() => {
+  folder = mkdtempSync(join(tmpdir(), "periodwise-store-"));
+});
+afterAll(() => rmSync(folder, { recursive: true, force: true }));
+
+let files = 0;
+
+async function read(
+  content: string | Uint8Array,
+  options?: ReadOptions,
+  ending = "csv",
+): Promise<StoredTable> {
+  const path = join(folder, `record-${files++}.${ending}`);
+  writeFileSync(path, content);
+  return readTable(path, options);
+}
+
+async function columns(content: string | Uint8Array, options?: ReadOptions, ending = "csv") {
+  const table = await read(content, options, ending);
+  return Object.fromEntries(table.names.map((name, i) => [name, Array.from(table.columns[i]!)]));
+}
+
+async function refused(content: string | Uint8Array, options?: ReadOptions, ending = "csv"): Promise<string> {
+  const thrown = await read(content, options, ending).then(
+    () => ({ code: "nothing refused", message: "" }),
+    (error: unknown) => error as { code: string; message: string },
+  );
+  return `${thrown.code}: ${thrown.message.replaceAll(folder, "")}`;
+}
+
+describe("a delimited file", () => {
+  test("is read whatever separates its cells", async () => {
+    const expected = { week: [1, 2], stock: [90.5, 83] };
+    for (const delimiter of [",", ";", "\t", "|"]) {
+      const text = `week${delimiter}stock\n1${delimiter}90.5\n2${delimiter}83\n`;
+      expect(await columns(text)).toEqual(expected);
+    }
+  });
+
+  test("is read whatever ends its lines", async () => {
+    for (const end of ["\n", "\r\n", "\r"])
+      expect(await columns(`week,stock${end}1,90${end}2,83${end}`)).toEqual({
+        week: [1, 2],
+        stock: [90, 83],
+      });
+    expect(await columns("week,stock\r\n1,90\n2,83")).toEqual({ week: [1, 2], stock: [90, 83] });
+  });
+
+  // RFC 4180, section 2, rules 5 to 7: quoted cells, line breaks and doubled quotes in them.
+  test("keeps delimiters, line breaks and quotes inside quoted cells", async () => {
+    expect(await columns('who,said\n"Ferry, north","a ""short"" note"\nStore,"two\nlines"\n')).toEqual({
+      who: ["Ferry, north", "Store"],
+      said: ['a "short" note', "two\nlines"],
+    });
+  });
+
+  test("tells an empty cell from zero", async () => {
+    expect(await columns("week,stock\n1,\n2,0\n")).toEqual({ week: [1, 2], stock: [Number.NaN, 0] });
+  });
+
+  test("is read with a decimal comma where the cells show it", async () => {
+    const table = await read("week;stock\n1;1.234,50\n2;0,5\n");
+    expect(Array.from(table.columns[1]!)).toEqual([1234.5, 0.5]);
+    expect(table.source.found).toEqual(["Numbers are read with a decimal comma."]);
+  });
+
+  test("is read with thousands separated by commas, spaces or apostrophes", async () => {
+    expect(await columns('week,owed\n1,"1,234.50"\n2,"2,000,000.00"\n')).toEqual({
+      week: [1, 2],
+      owed: [1234.5, 2e6],
+    });
+    expect(await columns("week;owed\n1;1 234,5\n2;12\u00a0000,25\n")).toEqual({
+      week: [1, 2],
+      owed: [1234.5, 12000.25],
+    });
+    expect(await columns("week;owed\n1;1'234.5\n2;7.25\n")).toEqual({ week: [1, 2], owed: [1234.5, 7.25] });
+  });
+
+  test("asks for the decimal sign where cells contradict each other or none settles it", async () => {
+    expect(await refused('row;balance\n1;1.234,56\n2;"1,234.56"\n')).toBe(
+      'decimal-sign-unclear: Row 2, balance: \'1,234.56\' - decimal sign unclear; choose comma or point: decimal: "," or decimal: ".".',
+    );
+    expect(await refused("row;balance\n1;1.234\n2;5.678\n")).toContain(
+      "decimal-sign-unclear: Row 1, balance: '1.234'",
+    );
+    expect(await columns("row;balance\n1;1.234\n2;5.678\n", { decimal: "," })).toEqual({
+      row: [1, 2],
+      balance: [1234, 5678],
+    });
+    expect(await columns("row;balance\n1;1.234\n2;5.678\n", { decimal: "." })).toEqual({
+      row: [1, 2],
+      balance: [1.234, 5.678],
+    });
+  });
+
+  test("reads credits in brackets or with a minus behind as negative, and says so", async () => {
+    const table = await read("row;paid\n1;(412.00)\n2;35.50-\n3;-7\n");
+    expect(Array.from(table.columns[1]!)).toEqual([-412, -35.5, -7]);
+    expect(table.source.found).toEqual([
+      'In "paid" 2 amounts in brackets or with a minus behind are read as negative.',
+    ]);
+  });
+
+  test("finds the order of day and month where a day above twelve shows it, and asks where none does", async () => {
+    expect(await columns("date,owed\n03/04/2025,1\n17/04/2025,2\n")).toEqual({
+      date: ["2025-04-03", "2025-04-17"],
+      owed: [1, 2],
+    });
+    expect(await columns("date,owed\n3/4/2025 9:30,1\n3/17/2025 14:05,2\n")).toEqual({
+      date: ["2025-03-04 09:30", "2025-03-17 14:05"],
+      owed: [1, 2],
+    });
+    expect(await refused("date,owed\n03/04/2025,1\n04/04/2025,2\n")).toBe(
+      'ambiguous-date: Ambiguous date: row 1, date: \'03/04/2025\'. Say dates: "day-month-year" or dates: "month-day-year"; dates: "text" leaves the column as it is.',
+    );
+    expect(await refused("date,owed\n13/04/2025,1\n04/14/2025,2\n")).toContain(
+      "mixed-dates: Row 2, date: '04/14/2025'",
+    );
+    expect(await columns("date,owed\n03/04/2025,1\n", { dates: "month-day-year" })).toEqual({
+      date: ["2025-03-04"],
+      owed: [1],
+    });
+    expect(await columns("date,owed\n03/04/2025,1\n", { dates: "text" })).toEqual({
+      date: ["03/04/2025"],
+      owed: [1],
+    });
+    expect(await columns("date,owed\n2025/4/3,1\n", {})).toEqual({ date: ["2025-04-03"], owed: [1] });
+    expect(await columns("date,owed\n3 Apr 2025,1\n", {})).toEqual({ date: ["2025-04-03"], owed: [1] });
+  });
+
+  test("leaves codes as text: leading zeros and more digits than a number keeps", async () => {
+    expect(await columns("item,id\n007,12345678901234567\n012,2\n")).toEqual({
+      item: ["007", "012"],
+      id: ["12345678901234567", "2"],
+    });
+  });
+
+  test("takes named texts for missing values and no others", async () => {
+    expect(await columns("week,stock\n1,n.d.\n2,83\n", { missing: ["n.d."] })).toEqual({
+      week: [1, 2],
+      stock: [Number.NaN, 83],
+    });
+    expect(await columns("week,stock\n1,n.d.\n2,83\n")).toEqual({ week: [1, 2], stock: ["n.d.", "83"] });
+  });
+
+  test("is read in UTF-8 with a mark, UTF-16 with a mark, and another encoding when told", async () => {
+    const text = "jour,valeur\nété,1\nhiver,2\n";
+    const expected = { jour: ["été", "hiver"], valeur: [1, 2] };
+    expect(await columns(`\ufeff${text}`)).toEqual(expected);
+    expect(await columns(Buffer.from(`\ufeff${text}`, "utf16le"))).toEqual(expected);
+    expect(await columns(Buffer.from(text, "latin1"), { encoding: "windows-1252" })).toEqual(expected);
+    expect(await refused(Buffer.from(text, "latin1"))).toBe(
+      'encoding-unclear: Line 2 of "/record-FILE.csv" is not UTF-8 text: "été,1". Say encoding: "windows-1252", or save the file as UTF-8 if it mixes encodings.'.replace(
+        "FILE",
+        String(files - 1),
+      ),
+    );
+  });
+
+  test("mixed encodings are refused with the line at which they part", async () => {
+    const mixed = Buffer.concat([
+      Buffer.from("jour,valeur\nété,1\n", "utf8"),
+      Buffer.from("été,2\n", "latin1"),
+    ]);
+    expect(await refused(mixed)).toContain("encoding-unclear: Line 3");
+  });
+
+  test("refuses ragged rows, open quotes, missing headers, no rows and unknown separators, saying where", async () => {
+    expect(await refused("a,b\n1,2\n3\n")).toMatch(
+      /^ragged-row: Row 2 \(line 3\) of ".*" has 1 cells where the header has 2\./,
+    );
+    expect(await refused("a,b\n1,2,3\n")).toMatch(/^ragged-row: Row 1 \(line 2\)/);
+    expect(await refused('a,b\n1,"open\n')).toMatch(/^unended-quote: A quoted cell that begins on line 2/);
+    expect(await refused("1,2\n3,4\n")).toMatch(
+      /^header-missing: The first row of ".*" holds numbers, not names: 1, 2\./,
+    );
+    expect(await refused("a,b\n")).toMatch(/^no-data-rows: No data rows were found\./);
+    expect(await refused("")).toMatch(/^no-data-rows: No data rows were found\./);
+    expect(await refused("a,b;c\n1,2;3\n")).toMatch(/^delimiter-unclear: What separates the cells/);
+    expect(await columns("1,2\n3,4\n", { header: false })).toEqual({
+      "column 1": [1, 3],
+      "column 2": [2, 4],
+    });
+    expect(await columns("Store list\nmade today\na,b\n1,2\n", { skip: 2 })).toEqual({ a: [1], b: [2] });
+  });
+
+  test("names empty and doubled columns apart, and keeps any other name as it is", async () => {
+    const table = await read("__proto__,,owed,owed,<b>x</b>\n1,2,3,4,5\n");
+    expect(table.names).toEqual(["__proto__", "column 2", "owed", "owed (2)", "<b>x</b>"]);
+    expect(table.source.found).toEqual([
+      'Column 2 has no name and is called "column 2".',
+      'Another column is named "owed"; column 4 is called "owed (2)".',
+    ]);
+  });
+
+  test("leaves empty rows at the end out and says how many", async () => {
+    const table = await read("week;stock\n1;2\n;\n;\n");
+    expect(table.source.rows).toBe(1);
+    expect(table.source.found).toEqual(["2 empty rows at the end are left out."]);
+  });
+
+  test("takes a cell that begins with = as the text it is", async () => {
+    expect(await columns('week,note\n1,=1+1\n2,"=HYPERLINK(""x"")"\n')).toEqual({
+      week: [1, 2],
+      note: ["=1+1", '=HYPERLINK("x")'],
+    });
+  });
+});
+
+test("a file that is not there is refused with the nearest name beside it", async () => {
+  writeFileSync(join(folder, "stock-levels.csv"), "a,b\n1,2\n");
+  await expect(readTable(join(folder, "stock-level.csv"))).rejects.toThrow(
+    /Did you mean "stock-levels.csv"\?/,
+  );
+});
+
+test("the checksum is the SHA-256 of the file's bytes", async () => {
+  // Source: FIPS 180-4 example, SHA-256 of "abc".
+  const table = await read("abc", { header: false });
+  expect(table.source.checksum).toBe("ba7816bf8f01cfea414140de5dae2223b00361a396177a9cb410ff61f20015ad");
+});
