@@ -17,10 +17,12 @@ export { answer, type CaseOptions, closeCase, openCase } from "./commands/case.j
 export type { Domain } from "./commands/cautions.js";
 export { compare } from "./commands/comparisons.js";
 export { reaches } from "./commands/decisions.js";
+export { type Explanation, explain } from "./commands/explain.js";
 export { fit } from "./commands/fits.js";
 export { forecast } from "./commands/projections.js";
 export { differences, observations, readRecord } from "./commands/records.js";
 export { type RecurrenceOptions, type Rule, recurrence } from "./commands/rules.js";
 export { show } from "./commands/show.js";
 export { type Figure, type FigureOptions, figure } from "./figures/index.js";
+export type { Term } from "./glossary/index.js";
 export { type Table, type TableOptions, table } from "./tables/index.js";

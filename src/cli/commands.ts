@@ -17,7 +17,13 @@ export const commands: Readonly<Record<string, Command>> = {
   kernel: async ({ words: [connectionFile] }) => {
     if (connectionFile === undefined) throw missing("connection file", "periodwise kernel <connection file>");
     const { runKernel } = await import("../kernel/index.js");
-    runKernel(connectionFile);
+    runKernel(connectionFile, async () => {
+      const [{ ruleText }, { tradeTerms }] = await Promise.all([
+        import("./rule-text.js"),
+        import("./trade-terms.js"),
+      ]);
+      return [ruleText, tradeTerms];
+    });
     return 0;
   },
   run: async ({ words, options, set }) => {

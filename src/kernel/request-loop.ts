@@ -1,6 +1,7 @@
+import { errorReport } from "./cells/traceback.js";
 import type { Message } from "./protocol/message.js";
 import { execute } from "./requests/execute.js";
-import { handlers } from "./requests/handlers.js";
+import { type Handler, handlers } from "./requests/handlers.js";
 import type { KernelState } from "./requests/kernel-state.js";
 import type { FromTransport, Outlet } from "./transport/port-messages.js";
 
@@ -31,7 +32,7 @@ export function requestLoop(kernel: KernelState, reply: ReplyTo): (message: From
         reply(outlet, request, "execute_reply", content);
         return aborted;
       });
-      await abort(given ?? []);
+      await abort(given);
     }
     busy = false;
   };
@@ -58,30 +59,33 @@ export function requestLoop(kernel: KernelState, reply: ReplyTo): (message: From
 }
 
 /** Publishes busy before and idle after, whatever happens between. @see Jupyter messaging, "Kernel status". */
-async function bracketed<T>(
-  kernel: KernelState,
-  request: Message,
-  work: () => Promise<T>,
-): Promise<T | undefined> {
+async function bracketed<T>(kernel: KernelState, request: Message, work: () => Promise<T>): Promise<T> {
   kernel.publish(request.header, "status", { execution_state: "busy" });
   try {
     return await work();
-  } catch (cause) {
-    process.stderr.write(
-      `A request of type ${request.header.msg_type} could not be answered: ${String(cause)}\n`,
-    );
-    return undefined;
   } finally {
     kernel.publish(request.header, "status", { execution_state: "idle" });
   }
 }
 
-/** An unknown request gets its busy and idle, and no reply. */
+/** An unknown request gets its busy and idle, and no reply; one that fails is told so. */
 async function handle(kernel: KernelState, reply: ReplyTo, outlet: Outlet, request: Message): Promise<void> {
   const type = request.header.msg_type;
   const handler = Object.hasOwn(handlers, type) ? handlers[type] : undefined;
   await bracketed(kernel, request, async () => {
-    const content = handler?.(kernel, request);
+    const content = await answer(handler, kernel, request);
     if (content !== undefined) reply(outlet, request, type.replace(/_request$/, "_reply"), content);
   });
+}
+
+async function answer(
+  handler: Handler | undefined,
+  kernel: KernelState,
+  request: Message,
+): Promise<object | undefined> {
+  try {
+    return await handler?.(kernel, request);
+  } catch (cause) {
+    return { status: "error", ...errorReport(cause, "", "this request", kernel.sources) };
+  }
 }

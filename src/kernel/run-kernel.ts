@@ -17,19 +17,19 @@ import { newPause } from "./transport/pause.js";
 import type { Outlet } from "./transport/port-messages.js";
 import { startTransport } from "./transport/start-transport.js";
 
-export interface KernelOptions {
-  /** Services for languages inside strings of a cell. */
-  readonly languages?: readonly StringLanguage[];
-}
-
 /** By this name a package used in cells finds `display`. */
 const displayName: unique symbol = Symbol.for("periodwise.display") as never;
 
 /**
  * Runs a kernel in this process until a front end shuts it down. Cells run in the present folder.
+ *
+ * @param languages - gives the services for languages inside strings of a cell, once the kernel has time.
  * @throws {KernelError} `unreadable-connection-file` | `incomplete-connection-file`.
  */
-export function runKernel(connectionFile: string, options: KernelOptions = {}): void {
+export function runKernel(
+  connectionFile: string,
+  languages: () => Promise<readonly StringLanguage[]> = async () => [],
+): void {
   const connection = readConnection(connectionFile);
   const session = randomUUID();
   const pause = newPause();
@@ -51,6 +51,7 @@ export function runKernel(connectionFile: string, options: KernelOptions = {}): 
 
   const sources = sourceRegister();
   let cells: CellSession | undefined;
+  let services: Promise<readonly StringLanguage[]> | undefined;
   const kernel: KernelState = {
     session: () => {
       cells ??= cellSession(process.cwd(), sources);
@@ -58,7 +59,10 @@ export function runKernel(connectionFile: string, options: KernelOptions = {}): 
     },
     sources,
     interrupts: interrupts(pause),
-    languages: options.languages ?? [],
+    languages: () => {
+      services ??= languages();
+      return services;
+    },
     questions: inputQuestions((request, content) => reply("stdin", request, "input_request", content)),
     history: [],
     publish,
@@ -70,7 +74,10 @@ export function runKernel(connectionFile: string, options: KernelOptions = {}): 
   surviveStrayErrors(kernel);
   transport.receive(requestLoop(kernel, reply));
   // The transport thread answers the first requests meanwhile.
-  setImmediate(() => kernel.session());
+  setImmediate(() => {
+    kernel.session();
+    void kernel.languages();
+  });
 }
 
 /** Puts what cells may name without an import on the global object, out of sight of enumeration. */

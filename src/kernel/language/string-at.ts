@@ -1,4 +1,5 @@
 import type ts from "typescript-cell";
+import { literalValue } from "./literal-value.js";
 import type { StringLanguage } from "./string-language.js";
 
 /** A string of a cell that is written in one of the registered languages. */
@@ -8,6 +9,8 @@ export interface LanguageString {
   readonly text: string;
   /** Where that begins in the cell, in UTF-16 units. */
   readonly start: number;
+  /** The arguments after it, as far as they are written out. */
+  readonly others: readonly unknown[];
 }
 
 /** All strings of a cell that are in a registered language, in order. */
@@ -21,10 +24,11 @@ export function languageStrings(
   const found: LanguageString[] = [];
   const visit = (node: ts.Node): void => {
     if (library.isCallExpression(node)) {
-      for (const [index, argument] of node.arguments.entries()) {
+      for (const index of node.arguments.keys()) {
         const callee = node.expression.getText(file);
         const language = languages.find((one) => one.matches(callee, index));
-        if (language !== undefined) found.push(...stringsOf(library, language, argument, file));
+        if (language !== undefined)
+          found.push(...stringsOf(library, language, node.arguments.slice(index), file));
       }
     }
     library.forEachChild(node, visit);
@@ -48,13 +52,14 @@ export function stringAt(
 function stringsOf(
   library: typeof ts,
   language: StringLanguage,
-  argument: ts.Expression,
+  [argument, ...following]: readonly ts.Expression[],
   file: ts.SourceFile,
 ): readonly LanguageString[] {
-  if (!library.isStringLiteralLike(argument)) return [];
+  if (argument === undefined || !library.isStringLiteralLike(argument)) return [];
   const start = argument.getStart(file) + 1;
   // A string still being typed has no closing quote yet.
   const closed = argument.end - start >= argument.text.length + 1;
   const text = file.text.slice(start, closed ? argument.end - 1 : argument.end);
-  return text === argument.text ? [{ language, text, start }] : [];
+  const others = following.map((one) => literalValue(library, one));
+  return text === argument.text ? [{ language, text, start, others }] : [];
 }

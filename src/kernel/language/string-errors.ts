@@ -10,15 +10,16 @@ export function stringErrors(
   languages: readonly StringLanguage[],
   cell: string,
 ): { readonly kind: "failed"; readonly cause: CellError } | undefined {
-  const complaints = languageStrings(library, languages, cell).flatMap(({ language, text, start: at }) =>
-    language.check(text).map(
-      ({ start, end, text: told }): Complaint => ({
-        text: told,
-        isSyntax: true,
-        start: placeAt(cell, at + start),
-        end: placeAt(cell, at + end),
-      }),
-    ),
+  const complaints = languageStrings(library, languages, cell).flatMap(
+    ({ language, text, start: at, others }) =>
+      language.check(text, others).map(
+        ({ start, end, text: told }): Complaint => ({
+          text: told,
+          isSyntax: true,
+          start: placeAt(cell, at + start),
+          end: placeAt(cell, at + end),
+        }),
+      ),
   );
   return complaints.length === 0 ? undefined : { kind: "failed", cause: new CellError(complaints) };
 }

@@ -25,5 +25,9 @@ export interface StringLanguage {
   ) => { start: number; end: number; items: readonly StringCompletion[] };
   /** Markdown about what stands at the position. */
   readonly inspect: (text: string, position: number) => string | undefined;
-  readonly check: (text: string) => readonly StringComplaint[];
+  /**
+   * What is wrong with the text. `others` are the arguments of the call after it, as far as they are written out:
+   * what is not a literal is undefined.
+   */
+  readonly check: (text: string, others: readonly unknown[]) => readonly StringComplaint[];
 }

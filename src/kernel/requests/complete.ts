@@ -12,9 +12,9 @@ interface Offers {
 }
 
 /** @see Jupyter messaging, "Completion"; the kinds travel in the metadata field that front ends read them from. */
-export function complete(kernel: KernelState, request: Message): object {
+export async function complete(kernel: KernelState, request: Message): Promise<object> {
   const cursor = cursorOf(request);
-  const { start, end, items } = offersInString(kernel, cursor) ?? offersInCode(kernel, cursor);
+  const { start, end, items } = (await offersInString(kernel, cursor)) ?? offersInCode(kernel, cursor);
   const cursor_start = toCodePoints(cursor.text, start);
   const cursor_end = toCodePoints(cursor.text, end);
   const kinds = items.map(({ text, kind }) => ({ text, type: kind, start: cursor_start, end: cursor_end }));
@@ -27,8 +27,9 @@ export function complete(kernel: KernelState, request: Message): object {
   };
 }
 
-function offersInString(kernel: KernelState, { text, position }: Cursor): Offers | undefined {
-  const found = stringAt(kernel.session().compiler.library, kernel.languages, text, position);
+async function offersInString(kernel: KernelState, { text, position }: Cursor): Promise<Offers | undefined> {
+  const languages = await kernel.languages();
+  const found = stringAt(kernel.session().compiler.library, languages, text, position);
   if (found === undefined) return undefined;
   const offers = found.language.complete(found.text, position - found.start);
   return { start: offers.start + found.start, end: offers.end + found.start, items: offers.items };

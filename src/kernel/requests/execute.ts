@@ -6,27 +6,18 @@ import { outputQueue } from "../output/output-queue.js";
 import { type Run, runAs } from "../output/run.js";
 import { valueBundle } from "../output/value-bundle.js";
 import type { Message } from "../protocol/message.js";
-import type { KernelState } from "./kernel-state.js";
+import type { HistoryEntry, KernelState } from "./kernel-state.js";
 import { evaluateExpressions } from "./user-expressions.js";
 
-interface ExecuteRequest {
+/** One execution: the request, read, and what belongs to it. */
+interface Execution {
   readonly code: string;
-  readonly silent: boolean;
-  readonly storesHistory: boolean;
   readonly expressions: Readonly<Record<string, unknown>>;
-}
-
-function read({ content }: Message): ExecuteRequest {
-  const silent = content["silent"] === true;
-  const expressions = content["user_expressions"];
-  return {
-    code: String(content["code"] ?? ""),
-    silent,
-    storesHistory: !silent && content["store_history"] !== false,
-    // An object of strings by the protocol; each is read as text below.
-    expressions:
-      typeof expressions === "object" && expressions !== null ? (expressions as Record<string, unknown>) : {},
-  };
+  readonly run: Run;
+  readonly count: number;
+  readonly label: string;
+  /** Its row in the history, when it has one. */
+  readonly entry: HistoryEntry | undefined;
 }
 
 /**
@@ -35,19 +26,34 @@ function read({ content }: Message): ExecuteRequest {
  * @see Jupyter messaging, "Execute".
  */
 export async function execute(kernel: KernelState, request: Message): Promise<object> {
-  const asked = read(request);
-  if (asked.storesHistory) {
-    kernel.count += 1;
-    kernel.history.push({ count: kernel.count, text: asked.code });
-  }
-  kernel.serial += 1;
-  const execution_count = kernel.count;
-  const publish = (type: string, content: object): void => kernel.publish(request.header, type, content);
-  if (!asked.silent) publish("execute_input", { code: asked.code, execution_count });
-  const run = newRun(kernel, request, asked.silent);
-  const reply = await runAs(run, () => answered(kernel, run, asked, execution_count));
+  const execution = begun(kernel, request);
+  const { run, code, count } = execution;
+  if (!run.silent) kernel.publish(request.header, "execute_input", { code, execution_count: count });
+  const reply = await runAs(run, () => answered(kernel, execution));
   await run.output.drained();
-  return { ...reply, execution_count };
+  return { ...reply, execution_count: count };
+}
+
+function begun(kernel: KernelState, request: Message): Execution {
+  const { content } = request;
+  const silent = content["silent"] === true;
+  const stored = !silent && content["store_history"] !== false;
+  const code = String(content["code"] ?? "");
+  const given = content["user_expressions"];
+  kernel.serial += 1;
+  if (stored) kernel.count += 1;
+  const count = kernel.count;
+  const entry = stored ? { count, text: code } : undefined;
+  if (entry) kernel.history.push(entry);
+  return {
+    code,
+    // An object of strings by the protocol; each is read as text later.
+    expressions: typeof given === "object" && given !== null ? (given as Record<string, unknown>) : {},
+    run: newRun(kernel, request, silent),
+    count,
+    label: stored ? `cell ${count}` : "this cell",
+    entry,
+  };
 }
 
 function newRun(kernel: KernelState, request: Message, silent: boolean): Run {
@@ -59,48 +65,39 @@ function newRun(kernel: KernelState, request: Message, silent: boolean): Run {
   return { serial: kernel.serial, request, output, silent, allowsInput, stopped: false };
 }
 
-async function answered(
-  kernel: KernelState,
-  run: Run,
-  asked: ExecuteRequest,
-  count: number,
-): Promise<object> {
-  const { output, silent, serial } = run;
-  const label = asked.storesHistory ? `cell ${count}` : "this cell";
-  const session = kernel.session();
-  kernel.interrupts.begin(run, session.stop);
+async function answered(kernel: KernelState, execution: Execution): Promise<object> {
+  const { run, code, label, expressions } = execution;
+  kernel.interrupts.begin(run, () => kernel.session().stop());
   try {
-    const refused = stringErrors(session.compiler.library, kernel.languages, asked.code);
-    const done = refused ?? (await session.run(asked.code, cellName(serial), label));
-    const outcome = await shown(kernel, done, run, count);
-    await output.drained();
+    const outcome = await outcomeOf(kernel, execution);
+    await run.output.drained();
     if (outcome.kind !== "failed") {
-      const user_expressions = await evaluateExpressions(kernel, asked.expressions);
-      return { status: "ok", payload: [], user_expressions };
+      return { status: "ok", payload: [], user_expressions: await evaluateExpressions(kernel, expressions) };
     }
-    const report = errorReport(outcome.cause, asked.code, label, kernel.sources);
-    if (!silent) output.add("error", report);
+    const report = errorReport(outcome.cause, code, label, kernel.sources);
+    if (!run.silent) run.output.add("error", report);
     return { status: "error", ...report };
   } finally {
     kernel.interrupts.end();
   }
 }
 
-/** Publishes the value of a cell. One that fails while it shows itself fails the cell. */
-async function shown(
-  kernel: KernelState,
-  outcome: CellOutcome,
-  run: Run,
-  execution_count: number,
-): Promise<CellOutcome> {
-  if (outcome.kind !== "value" || run.silent) return outcome;
+/** Checks, runs and shows. Whatever fails on the way, showing the value included, fails the cell. */
+async function outcomeOf(kernel: KernelState, execution: Execution): Promise<CellOutcome> {
+  const { code, run, label } = execution;
   try {
-    const data = await valueBundle(outcome.value);
-    const entry = kernel.history.at(-1);
-    if (entry?.count === execution_count) entry.result = String(data["text/plain"]);
-    run.output.add("execute_result", { execution_count, data, metadata: {} });
+    const session = kernel.session();
+    const refused = stringErrors(session.compiler.library, await kernel.languages(), code);
+    const outcome = refused ?? (await session.run(code, cellName(run.serial), label));
+    if (outcome.kind === "value" && !run.silent) await show(outcome.value, execution);
     return outcome;
   } catch (cause) {
     return { kind: "failed", cause };
   }
+}
+
+async function show(value: unknown, { run, count, entry }: Execution): Promise<void> {
+  const data = await valueBundle(value);
+  if (entry) entry.result = String(data["text/plain"]);
+  run.output.add("execute_result", { execution_count: count, data, metadata: {} });
 }

@@ -7,7 +7,7 @@ import { isComplete } from "./is-complete.js";
 import type { KernelState } from "./kernel-state.js";
 
 /** Answers a request: the content of the reply, or nothing for messages that get none. */
-export type Handler = (kernel: KernelState, request: Message) => object | undefined;
+export type Handler = (kernel: KernelState, request: Message) => object | undefined | Promise<object>;
 
 /** Requests other than those that the transport thread answers itself and `execute_request`, which queues. */
 export const handlers: Readonly<Record<string, Handler>> = {

@@ -6,17 +6,17 @@ import { enclosingCallee } from "./enclosing-callee.js";
 import type { KernelState } from "./kernel-state.js";
 
 /** @see Jupyter messaging, "Introspection". */
-export function inspect(kernel: KernelState, request: Message): object {
+export async function inspect(kernel: KernelState, request: Message): Promise<object> {
   const cursor = cursorOf(request);
   const deep = request.content["detail_level"] === 1;
-  const markdown = aboutString(kernel, cursor) ?? aboutCode(kernel, cursor, deep);
+  const markdown = (await aboutString(kernel, cursor)) ?? aboutCode(kernel, cursor, deep);
   if (markdown === undefined) return { status: "ok", found: false, data: {}, metadata: {} };
   const data = { "text/markdown": markdown, "text/plain": markdown.replace(/^```.*\n/gm, "") };
   return { status: "ok", found: true, data, metadata: {} };
 }
 
-function aboutString(kernel: KernelState, { text, position }: Cursor): string | undefined {
-  const found = stringAt(kernel.session().compiler.library, kernel.languages, text, position);
+async function aboutString(kernel: KernelState, { text, position }: Cursor): Promise<string | undefined> {
+  const found = stringAt(kernel.session().compiler.library, await kernel.languages(), text, position);
   return found?.language.inspect(found.text, position - found.start);
 }
 

@@ -11,7 +11,8 @@ export interface KernelState {
   readonly session: () => CellSession;
   readonly sources: SourceRegister;
   readonly interrupts: Interrupts;
-  readonly languages: readonly StringLanguage[];
+  /** The services for languages inside strings, loaded once, when first asked for. */
+  readonly languages: () => Promise<readonly StringLanguage[]>;
   readonly questions: InputQuestions;
   readonly history: HistoryEntry[];
   readonly publish: (parent: Message["parent"], type: string, content: object) => void;

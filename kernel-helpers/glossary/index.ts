@@ -1,0 +1,2 @@
+export type { Term } from "./term.js";
+export { termOf, terms } from "./terms.js";

@@ -1,0 +1,81 @@
+import type { StringCompletion, StringLanguage } from "../kernel/index.js";
+import {
+  type RecurrenceOptions,
+  type Rule,
+  type RuleLanguage,
+  recurrence,
+  ruleLanguage,
+} from "../rule/index.js";
+import { wordAt } from "./word-at.js";
+
+/** Help inside the text of `recurrence("...")`: its own names, the functions and words of rules, mistakes. */
+export const ruleText: StringLanguage = {
+  matches: (callee, argument) => argument === 0 && /(^|\.)recurrence$/.test(callee),
+  complete: (text, position) => {
+    const word = wordAt(text, position);
+    const offered = offers(text, word.text).filter((one) => one.text.startsWith(word.before));
+    return { start: word.start, end: word.end, items: offered };
+  },
+  inspect: (text, position) => about(wordAt(text, position).text, languageOf(text)),
+  check: (text, [given]) => {
+    const options = declared(given);
+    if (options === undefined) return [];
+    const failed = attempt(text, options);
+    return failed instanceof Error ? [complaint(failed, text)] : [];
+  },
+};
+
+/** The options that decide what a name is; `undefined` when the cell computes them. */
+function declared(given: unknown): RecurrenceOptions | undefined {
+  if (given === undefined) return {};
+  if (typeof given !== "object" || given === null) return undefined;
+  const wanted = Object.entries(given).filter(([name]) => name === "constants" || name === "inputs");
+  return wanted.every(([, value]) => value !== undefined) ? Object.fromEntries(wanted) : undefined;
+}
+
+function attempt(text: string, options: RecurrenceOptions): Rule | Error {
+  try {
+    return recurrence(text, options);
+  } catch (cause) {
+    return cause as Error;
+  }
+}
+
+function complaint(error: Error, text: string): { start: number; end: number; text: string } {
+  const { start, end } = (Reflect.get(error, "facts") ?? {}) as {
+    readonly start?: number;
+    readonly end?: number;
+  };
+  // The message shows the place too; here the cell does.
+  const [wrong = error.message, ...rest] = error.message.split("\n");
+  const remedy = rest.filter((line) => !line.startsWith("    "));
+  return { start: start ?? 0, end: end ?? text.length, text: [wrong, ...remedy].join(" ") };
+}
+
+function languageOf(text: string): RuleLanguage {
+  const read = attempt(text, {});
+  return read instanceof Error ? ruleLanguage() : ruleLanguage(read);
+}
+
+function offers(text: string, present: string): readonly StringCompletion[] {
+  const { functions, words, names } = languageOf(text);
+  const known = new Set([...functions, ...words, ...names].map(({ name }) => name));
+  // A text that is being typed does not read as a rule; its words are its names then.
+  const typed = [...text.matchAll(/[\p{L}_][\p{L}\p{N}_]*/gu)].map(([name]) => name.replace(/^Δ/, ""));
+  const others = new Set(typed.filter((name) => name !== present && name !== "" && !known.has(name)));
+  return [
+    ...names.map(({ name, role }) => ({ text: name, kind: role })),
+    ...[...others].map((name) => ({ text: name, kind: "name" })),
+    ...functions.map(({ name }) => ({ text: name, kind: "function" })),
+    ...words.map(({ name }) => ({ text: name, kind: "keyword" })),
+  ];
+}
+
+function about(word: string, { functions, words, names }: RuleLanguage): string | undefined {
+  const callable = functions.find(({ name }) => name === word);
+  if (callable) return `\`${callable.usage}\`\n\n${callable.meaning}`;
+  const reserved = words.find(({ name }) => name === word);
+  if (reserved) return `\`${reserved.name}\`\n\n${reserved.meaning}`;
+  const own = names.find(({ name }) => name === word.replace(/^Δ/, ""));
+  return own && `\`${own.name}\`\n\n${own.role} of this rule${own.unit === "" ? "" : `, in ${own.unit}`}`;
+}
