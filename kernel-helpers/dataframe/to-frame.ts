@@ -5,7 +5,8 @@ import { noteFrame } from "./frame-notes.js";
 import { showFrames } from "./show-frames.js";
 
 /**
- * A danfo DataFrame of a table. A missing number is null in the frame, never NaN turned to zero.
+ * A danfo DataFrame of a table. A missing number is NaN in the frame, because danfo's arithmetic counts null as
+ * zero; any other missing cell is null.
  *
  * danfo makes a property of every column name, so a name that one of its own members has (`index`, `values`,
  * `shape`), an empty one and a second equal one cannot be carried: such a column is called "values (column)",
@@ -13,10 +14,11 @@ import { showFrames } from "./show-frames.js";
  */
 export function toFrame(table: ColumnTable): DataFrame {
   const names = frameNames(table.names);
+  const dtypes = table.columns.map(kindOf);
   const rows = Array.from({ length: rowCount(table) }, (_, row) =>
-    table.columns.map((column) => cellAt(column, row)),
+    table.columns.map((column, at) => column[row] ?? (dtypes[at] === "float32" ? Number.NaN : null)),
   );
-  const frame = new (danfo().DataFrame)(rows, { columns: [...names], dtypes: table.columns.map(kindOf) });
+  const frame = new (danfo().DataFrame)(rows, { columns: [...names], dtypes });
   showFrames();
   const renamed = names.some((name, i) => name !== table.names[i]);
   noteFrame(frame, {
@@ -24,11 +26,6 @@ export function toFrame(table: ColumnTable): DataFrame {
     ...(table.decisions && { decisions: table.decisions }),
   });
   return frame;
-}
-
-function cellAt(column: Column, row: number): unknown {
-  const cell = column[row];
-  return cell === undefined || Number.isNaN(cell) ? null : cell;
 }
 
 /** danfo guesses a column's kind from its first rows; here every cell is asked. */
@@ -41,17 +38,13 @@ function kindOf(column: Column): string {
 }
 
 function frameNames(names: readonly string[]): readonly string[] {
+  const members = new (danfo().DataFrame)([[0]], { columns: ["\0"] });
   const taken = new Set<string>();
   return names.map((name, i) => {
-    const plain = name === "" ? `column ${i + 1}` : isMember(name) ? `${name} (column)` : name;
+    const plain = name === "" ? `column ${i + 1}` : name in members ? `${name} (column)` : name;
     let free = plain;
     for (let n = 2; taken.has(free); n++) free = `${plain} (${n})`;
     taken.add(free);
     return free;
   });
-}
-
-function isMember(name: string): boolean {
-  const own = new (danfo().DataFrame)([[0]], { columns: ["a"] });
-  return name !== "a" && name in own;
 }
