@@ -1,5 +1,5 @@
 import { createRequire } from "node:module";
-import { dirname, join } from "node:path";
+import { dirname, join, parse, relative } from "node:path";
 import type ts from "typescript-cell";
 import { cellGlobals, smallNodeGlobals } from "./cell-globals.js";
 import type { OwnPackage } from "./installation.js";
@@ -77,11 +77,27 @@ function cellOptions(library: typeof ts, packages: readonly OwnPackage[]): ts.Co
     checkJs: false,
     moduleResolution: library.ModuleResolutionKind.Bundler,
     customConditions: ["node"],
-    paths: Object.fromEntries(packages.map(({ name, types }) => [name, [types]])),
+    ...packagePaths(packages),
     types: [],
     typeRoots: [dirname(dirname(load.resolve("@types/node/package.json", { paths: [converterPackage] })))],
     inlineSourceMap: true,
   };
+}
+
+/**
+ * Where the compiler finds the kernel's own packages, and by what name it writes their types into declarations:
+ * a name by path would not do, since the compiler refuses one that leads through another folder's packages.
+ */
+function packagePaths(packages: readonly OwnPackage[]): ts.CompilerOptions {
+  const pathsBasePath = parse(__dirname).root.replaceAll("\\", "/");
+  const fromRoot = (path: string): string => relative(pathsBasePath, path).replaceAll("\\", "/");
+  // The first that fits names a file: the package inside another's folder goes before that other.
+  const innerFirst = [...packages].sort((one, other) => other.folder.length - one.folder.length);
+  const entries = innerFirst.flatMap(({ name, types, folder }) => [
+    [name, [fromRoot(types)]],
+    [`${name}/*`, [fromRoot(join(folder, "*"))]],
+  ]);
+  return { pathsBasePath, paths: Object.fromEntries(entries) };
 }
 
 /** The second stage of compilation (to CommonJS), with loop checks, keeping the maps of both stages. */

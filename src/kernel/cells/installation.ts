@@ -1,10 +1,11 @@
-import { existsSync } from "node:fs";
+import { existsSync, realpathSync } from "node:fs";
 import { createRequire } from "node:module";
 import { dirname, join } from "node:path";
 
 /** A package that every cell can import, wherever its notebook is: the kernel's own copy of it. */
 export interface OwnPackage {
   readonly name: string;
+  readonly folder: string;
   /** The file that `require` gives. */
   readonly program: string;
   /** The declarations that cells are checked against. */
@@ -23,10 +24,12 @@ export function installationFolder(from: string = __dirname): string {
 export function ownPackages(): readonly OwnPackage[] {
   const require = createRequire(__filename);
   return names.flatMap((name) => {
-    const folder = folderOf(name, require);
-    if (folder === undefined) return [];
+    const found = folderOf(name, require);
+    if (found === undefined) return [];
+    // The compiler knows files by their real paths.
+    const folder = realpathSync(found);
     const { main, types } = require(join(folder, "package.json")) as { main: string; types: string };
-    return [{ name, program: join(folder, main), types: join(folder, types) }];
+    return [{ name, folder, program: join(folder, main), types: join(folder, types) }];
   });
 }
 
