@@ -1,15 +1,31 @@
 import { chiSquareQuantile, fQuantile } from "../numeric/index.js";
 import type { FitOptions } from "./fit-options.js";
 
-/** sigma^2 and the critical value of the profile's increase, by the fit's convention. */
-export function cutOf(
-  sumOfSquares: number,
-  count: number,
-  free: number,
-  options: FitOptions,
-): { readonly variance: number; readonly cut: number } {
-  const level = options.level ?? 0.95;
-  if (options.cut === "chi-square")
-    return { variance: sumOfSquares / count, cut: chiSquareQuantile(level, 1) };
-  return { variance: sumOfSquares / (count - free), cut: fQuantile(level, 1, count - free) };
+/** What an increase of the objective is divided by, and the critical values of the result. */
+export interface Cut {
+  readonly variance: number;
+  readonly cut: number;
+  /** Critical value at the level halfway to certainty: a constant is determined where even that one is passed. */
+  readonly firmCut: number;
+}
+
+/** sigma^2 and the critical values of a sum of squares, by the fit's convention. */
+export function cutOf(sumOfSquares: number, count: number, free: number, options: FitOptions): Cut {
+  if (typeof options.spread === "object") return likelihoodCut(options);
+  if (options.cut === "chi-square") return { ...likelihoodCut(options), variance: sumOfSquares / count };
+  const [cut, firmCut] = levels(options).map((level) => fQuantile(level, 1, count - free)) as [
+    number,
+    number,
+  ];
+  return { variance: sumOfSquares / (count - free), cut, firmCut };
+}
+
+/** The critical values of twice a negative log-likelihood. */
+export function likelihoodCut(options: FitOptions): Cut {
+  const [cut, firmCut] = levels(options).map((level) => chiSquareQuantile(level, 1)) as [number, number];
+  return { variance: 1, cut, firmCut };
+}
+
+function levels({ level = 0.95 }: FitOptions): readonly [number, number] {
+  return [level, (1 + level) / 2];
 }

@@ -1,9 +1,9 @@
 import type { ObservedGroup } from "../record/index.js";
 import type { Rule } from "../rule/index.js";
-import type { FitOptions } from "./fit-options.js";
-import type { ResidualRows } from "./residual-rows.js";
+import type { FitRows } from "./fit-rows.js";
+import type { Optimum } from "./optimum.js";
 
-/** One residual of a fit. */
+/** One compared value of a fit. */
 export interface FitPoint {
   readonly state: string;
   /** Step index of the value that was compared. */
@@ -15,35 +15,30 @@ export interface FitPoint {
   readonly fitted: number;
   /** Observed minus fitted, on the fitting scale. */
   readonly residual: number;
-  /** Share of its own fitted value that this value decides: 0 to 1. */
+  /** Share of its own fitted value that this value decides: 0 to 1; NaN where a constant is not determined. */
   readonly leverage: number;
 }
 
-/** The residuals of a fit at its optimum, with leverage J (J'J)^-1 J'. */
+/** The values of a fit at its optimum, with leverage J (J'J)^-1 J'. */
 export function fitPoints(
   rule: Rule,
   group: ObservedGroup,
-  options: FitOptions,
-  rows: ResidualRows,
-  at: Float64Array,
-  covariance: Float64Array,
+  rows: FitRows,
+  found: Pick<Optimum, "at" | "covariance" | "cut">,
 ): readonly FitPoint[] {
-  const skipped = options.errors === "process" ? 1 : 0;
-  const states = rule.states.length;
-  rows.prepare(at, true);
+  rows.prepare(found.at, true);
   return Array.from({ length: rows.count }, (_, i) => {
-    const residual = rows.residualAt(i);
-    const entry = Math.floor(i / states) + skipped;
-    const state = rule.states[i % states]!;
+    const residual = rows.residualAt(i) / rows.roots[i]!;
+    const entry = rows.entries[i]!;
     return {
-      state,
+      state: rule.states[rows.states[i]!]!,
       index: group.index[entry]!,
       time: group.time[entry]!,
       row: group.rows[entry]!,
-      observed: group.values[state]![entry]!,
+      observed: rows.observed[i]!,
       fitted: rows.fitted(),
       residual,
-      leverage: leverage(rows.row, covariance),
+      leverage: leverage(rows.row, found.covariance) / found.cut.variance,
     };
   });
 }

@@ -1,36 +1,20 @@
-import type { LinearisedSystem, StopReason, Warning } from "../numeric/index.js";
-import { covarianceFromTriangle, minimiseSquares, studentQuantile } from "../numeric/index.js";
+import type { StopReason, Warning } from "../numeric/index.js";
 import type { ObservedGroup } from "../record/index.js";
-import { compileRule, type Rule } from "../rule/index.js";
+import type { Rule } from "../rule/index.js";
 import { checkGroup } from "./check-group.js";
 import { type Criteria, criteria } from "./criteria.js";
 import { cutOf } from "./cut.js";
+import { type Estimate, estimatesOf } from "./estimate-of.js";
 import type { FitOptions } from "./fit-options.js";
 import { type FitPoint, fitPoints } from "./fit-points.js";
+import type { FitRows } from "./fit-rows.js";
 import { fitWarnings } from "./fit-warnings.js";
-import { type Interval, waldInterval } from "./interval.js";
-import { normalEquations } from "./normal-equations.js";
-import { type Profile, profileInterval } from "./profile-interval.js";
+import { type Optimum, optimum } from "./optimum.js";
+import { prepared } from "./prepared.js";
 import { refuseNoStart } from "./refusals.js";
-import type { ResidualRows } from "./residual-rows.js";
-import { rowsOf } from "./rows-of.js";
+import { squaresObjective } from "./squares-objective.js";
 import { startingPoints } from "./starting-points.js";
 import { place, type Unknowns, unknownsOf } from "./unknowns.js";
-
-/** One unknown of a fit. */
-export interface Estimate {
-  /** The constant's name, or "N[0]" for an initial state. */
-  readonly name: string;
-  readonly role: "constant" | "initial";
-  readonly unit: string;
-  readonly value: number;
-  /** Undefined where the record does not determine it. */
-  readonly standardError: number | undefined;
-  readonly profile: Interval;
-  readonly wald: Interval | undefined;
-  /** By increasing value: (RSS(value) - RSS) / sigma^2; cut by `cut`. */
-  readonly trace: Profile["trace"];
-}
 
 /** The fit of one group of a record. */
 export interface GroupFit {
@@ -43,7 +27,7 @@ export interface GroupFit {
   /** Initial states of a trajectory fit (period 0); of a one-step fit the first recorded values. */
   readonly initial: Readonly<Record<string, number>>;
   readonly sumOfSquares: number;
-  /** n: residuals. */
+  /** n: values compared. */
   readonly count: number;
   /** n - p. */
   readonly degreesOfFreedom: number;
@@ -54,121 +38,63 @@ export interface GroupFit {
   readonly cut: number;
   readonly stop: StopReason;
   readonly points: readonly FitPoint[];
+  /** Other optima within 2 log-likelihood units: their estimates, and by how much they lie behind. */
+  readonly rivals: readonly { readonly estimates: readonly number[]; readonly behind: number }[];
   readonly warnings: readonly Warning[];
 }
-
-/** How many starting points are tried before the lowest optimum is taken. */
-const tries = 3;
 
 /** Fits a rule to one group of a record. */
 export function fitGroup(rule: Rule, group: ObservedGroup, options: FitOptions): GroupFit {
   const unknowns = unknownsOf(rule, options);
   checkGroup(rule, group, options, unknowns);
-  const compiled = compileRule(rule);
-  const rows = rowsOf(rule, compiled, group, unknowns, options);
-  const starts = startingPoints(rule, compiled, group, options, unknowns, rows);
+  const whole = prepared(rule, group, unknowns, options);
+  const starts = startingPoints(rule, group, options, unknowns, whole);
   if (starts.length === 0) throw refuseNoStart(group, rule.text);
-  const system = normalEquations(rows);
-  const solved = solve(system, rows, unknowns, starts, options);
-  return describe(rule, group, options, unknowns, rows, solved);
+  const { count, size } = whole.rows;
+  const found = optimum(
+    squaresObjective(whole.system),
+    unknowns,
+    starts,
+    (sum) => cutOf(sum, count, size, options),
+    options.intervals !== "none",
+  );
+  return describeFit(rule, group, options, unknowns, whole.rows, found);
 }
 
-interface Solved {
-  readonly at: Float64Array;
-  readonly sumOfSquares: number;
-  readonly stop: StopReason;
-  readonly profiles: readonly Profile[];
-  readonly covariance: Float64Array;
-  readonly determined: readonly boolean[];
-  readonly cut: number;
-}
-
-/** The lowest optimum from several starts, with its profiles; done again where a profile finds a lower one. */
-function solve(
-  system: LinearisedSystem,
-  rows: ResidualRows,
-  unknowns: Unknowns,
-  starts: readonly Float64Array[],
-  options: FitOptions,
-): Solved {
-  const searches = starts.slice(0, tries).map((start) => minimiseSquares(system, start, unknowns));
-  const best = searches.reduce((low, next) => (next.sumOfSquares < low.sumOfSquares ? next : low));
-  const at = Float64Array.from(best.estimates);
-  const { variance, cut } = cutOf(best.sumOfSquares, rows.count, rows.size, options);
-  system.evaluate(at);
-  system.linearise(at);
-  const { covariance, determined } = covarianceFromTriangle(system.triangle, system.size);
-  const problem = {
-    system,
-    estimates: at,
-    sumOfSquares: best.sumOfSquares,
-    lower: unknowns.lower,
-    upper: unknowns.upper,
-    variance,
-    cut,
-    level: options.level ?? 0.95,
-  };
-  const profiles = unknowns.names.map((_, i) => {
-    const error = Math.sqrt(variance * covariance[i * rows.size + i]!);
-    const usable = determined[i] && error > 0 && Number.isFinite(error);
-    const spacing = usable ? error * Math.sqrt(cut) : 0.1 * Math.abs(at[i]!) || 1;
-    return profileInterval(problem, i, spacing);
-  });
-  const better = profiles.find((profile) => profile.better !== undefined)?.better;
-  if (better !== undefined && starts[0] !== better) return solve(system, rows, unknowns, [better], options);
-  return { at, sumOfSquares: best.sumOfSquares, stop: best.stop, profiles, covariance, determined, cut };
-}
-
-function describe(
+/** A group's optimum as a result to be read. */
+function describeFit(
   rule: Rule,
   group: ObservedGroup,
   options: FitOptions,
   unknowns: Unknowns,
-  rows: ResidualRows,
-  solved: Solved,
+  rows: FitRows,
+  found: Optimum,
 ): GroupFit {
-  const { at, profiles, covariance, determined } = solved;
-  const size = rows.size;
-  const degreesOfFreedom = rows.count - size;
-  const variance = solved.sumOfSquares / degreesOfFreedom;
-  const level = options.level ?? 0.95;
-  const student = studentQuantile((1 + level) / 2, degreesOfFreedom);
-  const estimates = unknowns.names.map((name, i): Estimate => {
-    const profile = profiles[i]!;
-    const bounded = profile.interval.lower !== undefined && profile.interval.upper !== undefined;
-    const known = determined[i] && bounded;
-    const standardError = known ? Math.sqrt(variance * covariance[i * size + i]!) : undefined;
-    return {
-      name,
-      role: unknowns.roles[i]!,
-      unit: rule.units[name] ?? "",
-      value: at[i]!,
-      standardError,
-      profile: profile.interval,
-      wald: waldInterval(at[i]!, standardError, student, level),
-      trace: profile.trace,
-    };
-  });
-  place(unknowns, at);
-  const first = (state: string): number => group.values[state]![0]!;
+  const degreesOfFreedom = rows.count - rows.size;
+  const { variance } = found.cut;
+  place(unknowns, found.at);
   const initial = rule.states.map((state, s) => [
     state,
-    options.errors === "process" ? first(state) : unknowns.initial[s]!,
+    options.errors === "process" ? group.values[state]![0]! : unknowns.initial[s]!,
   ]);
   const fitted = {
     group: group.name,
-    estimates,
-    covariance: Array.from(covariance, (value) => value * variance),
+    estimates: estimatesOf(rule, unknowns, found, options.level ?? 0.95, degreesOfFreedom),
+    covariance: Array.from(found.covariance),
     constants: Object.fromEntries(rule.constants.map((name, c) => [name, unknowns.constants[c]!])),
     initial: Object.fromEntries(initial) as Record<string, number>,
-    sumOfSquares: solved.sumOfSquares,
+    sumOfSquares: found.value,
     count: rows.count,
     degreesOfFreedom,
-    sigma: Math.sqrt(variance),
-    criteria: criteria(solved.sumOfSquares, rows.count, size),
-    cut: solved.cut,
-    stop: solved.stop,
-    points: fitPoints(rule, group, options, rows, at, covariance),
+    sigma: Math.sqrt(found.value / degreesOfFreedom),
+    criteria: criteria(found.value, rows, options),
+    cut: found.cut.cut,
+    stop: found.stop,
+    points: fitPoints(rule, group, rows, found),
+    rivals: found.rivals.map(({ estimates, value }) => ({
+      estimates: Array.from(estimates),
+      behind: (value - found.value) / variance / 2,
+    })),
   };
   return Object.freeze({ ...fitted, warnings: fitWarnings(fitted, unknowns) });
 }

@@ -1,68 +1,99 @@
 import type { ObservedGroup } from "../record/index.js";
 import type { CompiledRule, Rule } from "../rule/index.js";
-import type { Spread } from "./fit-options.js";
+import { type FitOptions, onLogScale } from "./fit-options.js";
+import type { FitRows } from "./fit-rows.js";
 import { inputsByPeriod } from "./inputs-by-period.js";
-import type { ResidualRows } from "./residual-rows.js";
+import { recordedPairs } from "./recorded-pairs.js";
+import { slotsOf } from "./slots.js";
 import { place, type Unknowns } from "./unknowns.js";
+import { rootWeight, valueTable } from "./value-table.js";
 
 /**
- * Residuals of single steps: the rule is started afresh at every recorded value and compared with the next
- * one; over a gap of k periods it is iterated k times. This blames the process: each step has its own error.
+ * The rule is started afresh at every recorded value and compared with the next one; over a gap of k periods it is
+ * iterated k times. This blames the process: each step has its own error.
  */
 export function oneStepRows(
   rule: Rule,
   compiled: CompiledRule,
   group: ObservedGroup,
   unknowns: Unknowns,
-  spread: Spread,
-): ResidualRows {
+  options: FitOptions,
+): FitRows {
+  const { from, to, spans, sources } = recordedPairs(rule, group);
+  const slots = slotsOf(rule);
+  const slotStates = Int32Array.from(slots, ({ state }) => rule.states.indexOf(state));
   const states = rule.states.length;
-  const width = rule.constants.length + states;
-  const pairs = group.index.length - 1;
-  let longest = 1;
-  for (let i = 0; i < pairs; i++) longest = Math.max(longest, group.index[i + 1]! - group.index[i]!);
-  const values = new Float64Array((longest + 1) * states);
-  const sensitivities = new Float64Array((longest + 1) * states * width);
-  const observed = rule.states.map((state) => group.values[state]!);
-  const from = new Float64Array(states);
+  const width = rule.constants.length + slots.length;
+  const longest = spans.reduce((most, span) => Math.max(most, span), 1);
+  const path = new Float64Array((longest + 1) * slots.length);
+  const sensitivities = new Float64Array((longest + 1) * slots.length * width);
+  const values = valueTable(rule, group);
+  const cells = comparedCells(to, states, values);
+  const entries = Int32Array.from(cells, ({ pair }) => to[pair]!);
+  const cellStates = Int32Array.from(cells, ({ state }) => state);
+  const pairs = Int32Array.from(cells, ({ pair }) => pair);
+  const observed = Float64Array.from(cells, ({ pair, state }) => values[to[pair]! * states + state]!);
+  const roots = Float64Array.from(cells, ({ pair, state }) =>
+    rootWeight(group, rule.states[state]!, to[pair]!, options.spread),
+  );
+  const start = new Float64Array(slots.length);
   const { columns, constants } = unknowns;
   const size = columns.length;
   const row = new Float64Array(size);
   const inputs = inputsByPeriod(rule, group);
-  const log = spread === "proportional";
+  const log = onLogScale(options);
   let withRows = false;
   let fitted = 0;
-  /** Runs the rule over pair number `pair`; gives the row of the path where the next value stands. */
-  const run = (pair: number): number => {
-    const period = group.index[pair]!;
-    const span = group.index[pair + 1]! - period;
-    for (let s = 0; s < states; s++) from[s] = observed[s]![pair]!;
+  let ran = -1;
+  const run = (pair: number): void => {
+    ran = pair;
+    for (let s = 0; s < start.length; s++)
+      start[s] = values[sources[pair * start.length + s]! * states + slotStates[s]!]!;
+    const period = group.index[from[pair]!]!;
     if (withRows)
-      compiled.pathWithSensitivities(from, constants, inputs, period, span, values, sensitivities);
-    else compiled.path(from, constants, inputs, period, span, values);
-    return span;
+      compiled.pathWithSensitivities(start, constants, inputs, period, spans[pair]!, path, sensitivities);
+    else compiled.path(start, constants, inputs, period, spans[pair]!, path);
   };
-  let span = 0;
   return {
     size,
-    count: pairs * states,
+    count: cells.length,
     row,
+    entries,
+    states: cellStates,
+    observed,
+    roots,
+    take(given) {
+      values.set(given);
+      for (let i = 0; i < observed.length; i++) observed[i] = given[entries[i]! * states + cellStates[i]!]!;
+    },
     prepare(at, needRows) {
       place(unknowns, at);
       withRows = needRows;
+      ran = -1;
     },
     residualAt(i) {
-      const state = i % states;
-      const pair = (i - state) / states;
-      if (state === 0) span = run(pair);
-      const cell = span * states + state;
-      fitted = values[cell]!;
-      const weight = log ? -1 / fitted : -1;
-      if (withRows)
-        for (let a = 0; a < size; a++) row[a] = weight * sensitivities[cell * width + columns[a]!]!;
-      const next = observed[state]![pair + 1]!;
-      return log ? Math.log(next) - Math.log(fitted) : next - fitted;
+      const pair = pairs[i]!;
+      if (pair !== ran) run(pair);
+      const cell = spans[pair]! * slots.length + cellStates[i]!;
+      fitted = path[cell]!;
+      if (withRows) {
+        const scale = -roots[i]! / (log ? fitted : 1);
+        for (let a = 0; a < size; a++) row[a] = scale * sensitivities[cell * width + columns[a]!]!;
+      }
+      return roots[i]! * (log ? Math.log(observed[i]!) - Math.log(fitted) : observed[i]! - fitted);
     },
     fitted: () => fitted,
   };
+}
+
+/** The recorded values at the ends of pairs. */
+function comparedCells(
+  to: Int32Array,
+  states: number,
+  values: Float64Array,
+): readonly { readonly pair: number; readonly state: number }[] {
+  return Array.from({ length: to.length * states }, (_, k) => ({
+    pair: Math.floor(k / states),
+    state: k % states,
+  })).filter(({ pair, state }) => !Number.isNaN(values[to[pair]! * states + state]!));
 }

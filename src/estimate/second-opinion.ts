@@ -1,8 +1,7 @@
 import { levenbergMarquardt } from "ml-levenberg-marquardt";
-import { compileRule } from "../rule/index.js";
 import type { Fit } from "./fit.js";
 import type { GroupFit } from "./group-fit.js";
-import { rowsOf } from "./rows-of.js";
+import { prepared } from "./prepared.js";
 import { unknownsOf } from "./unknowns.js";
 
 /** What an independent solver says of a fit. */
@@ -21,7 +20,7 @@ export interface SecondOpinion {
 export function secondOpinion(fit: Fit, group: GroupFit): SecondOpinion {
   const recorded = fit.observations.groups.find((each) => each.name === group.group)!;
   const unknowns = unknownsOf(fit.rule, fit.options);
-  const rows = rowsOf(fit.rule, compileRule(fit.rule), recorded, unknowns, fit.options);
+  const { rows } = prepared(fit.rule, recorded, unknowns, fit.options);
   const values = group.estimates.map((estimate) => estimate.value);
   const scales = values.map((value) => Math.abs(value) || 1);
   const start = group.estimates.map(

@@ -1,16 +1,19 @@
-import { minimiseSquares, randomStream } from "../numeric/index.js";
+import { minimiseSquares } from "../numeric/index.js";
 import type { ObservedGroup } from "../record/index.js";
-import type { CompiledRule, Rule } from "../rule/index.js";
+import type { Rule } from "../rule/index.js";
 import type { FitOptions } from "./fit-options.js";
-import { normalEquations, sumOfSquaresAt } from "./normal-equations.js";
-import { oneStepRows } from "./one-step-rows.js";
-import type { ResidualRows } from "./residual-rows.js";
+import type { FitRows } from "./fit-rows.js";
+import { sumOfSquaresAt } from "./normal-equations.js";
+import { type Prepared, prepared } from "./prepared.js";
+import { trialPoints } from "./trial-values.js";
 import { type Unknowns, unknownsOf } from "./unknowns.js";
 
-/** Most combinations of trial values that are looked at. */
-const mostTrials = 20_000;
-/** How many of the best trial points are carried on. */
-const kept = 6;
+/** How many of the best trial points are carried on, and polished to a few digits. */
+const kept = 5;
+const polish = { gradientTolerance: 1e-4, iterationLimit: 60 };
+/** Points looked at: a few for speed, many where those led nowhere. */
+const fewTrials = 300;
+const manyTrials = 10_000;
 
 interface Point {
   readonly at: Float64Array;
@@ -23,28 +26,51 @@ interface Point {
  */
 export function startingPoints(
   rule: Rule,
-  compiled: CompiledRule,
   group: ObservedGroup,
   options: FitOptions,
   unknowns: Unknowns,
-  rows: ResidualRows,
+  whole: Prepared,
 ): readonly Float64Array[] {
-  const stepUnknowns = unknownsOf(rule, { ...options, errors: "process" });
-  const step = oneStepRows(rule, compiled, group, stepUnknowns, options.spread ?? "constant");
-  const trials = trialPoints(rule, group, options, stepUnknowns);
-  const best = ranked(trials, step);
-  const system = normalEquations(step);
-  const polished = best.map((point) => {
-    const done = minimiseSquares(system, point.at, stepUnknowns);
-    return { at: Float64Array.from(done.estimates), sum: done.sumOfSquares };
-  });
-  if (options.errors === "process") return sorted(polished).map((point) => point.at);
-  const whole = [...polished, ...best].map((point) => withInitial(point.at, unknowns, rule, group));
-  return ranked(whole, rows).map((point) => point.at);
+  const few = candidates(rule, group, options, unknowns, whole, fewTrials);
+  return few.length > 0 ? few : candidates(rule, group, options, unknowns, whole, manyTrials);
 }
 
-function ranked(points: readonly Float64Array[], rows: ResidualRows): Point[] {
-  return sorted(points.map((at) => ({ at, sum: sumOfSquaresAt(rows, at) }))).slice(0, kept);
+function candidates(
+  rule: Rule,
+  group: ObservedGroup,
+  options: FitOptions,
+  unknowns: Unknowns,
+  whole: Prepared,
+  most: number,
+): readonly Float64Array[] {
+  const { rows } = whole;
+  if (options.factor !== undefined) {
+    const trials = trialPoints(rule, group, options, unknowns, 20 * most);
+    for (const trial of trials) scaleFactors(trial, unknowns, rows);
+    return polished(ranked(trials, rows, 3 * kept), whole, unknowns).map((point) => point.at);
+  }
+  const stepOptions = { ...options, errors: "process" as const };
+  const stepUnknowns = unknownsOf(rule, stepOptions);
+  const step = options.errors === "process" ? whole : prepared(rule, group, stepUnknowns, stepOptions);
+  const trials = trialPoints(rule, group, options, stepUnknowns, most);
+  const best = ranked(trials, step.rows, kept);
+  const better = polished(best, step, stepUnknowns);
+  if (options.errors === "process") return better.map((point) => point.at);
+  const starts = [...better, ...best].map((point) => withInitial(point.at, unknowns, group, options));
+  return ranked(starts, rows, kept).map((point) => point.at);
+}
+
+function ranked(points: readonly Float64Array[], rows: FitRows, keep: number): Point[] {
+  return sorted(points.map((at) => ({ at, sum: sumOfSquaresAt(rows, at) }))).slice(0, keep);
+}
+
+function polished(points: readonly Point[], { system }: Prepared, { lower, upper }: Unknowns): Point[] {
+  return sorted(
+    points.map((point) => {
+      const done = minimiseSquares(system, point.at, { lower, upper, ...polish });
+      return { at: done.estimates, sum: done.sumOfSquares };
+    }),
+  );
 }
 
 function sorted(points: readonly Point[]): Point[] {
@@ -52,66 +78,43 @@ function sorted(points: readonly Point[]): Point[] {
 }
 
 /** The constants of a one-step point, with the first recorded values as initial states. */
-function withInitial(at: Float64Array, unknowns: Unknowns, rule: Rule, group: ObservedGroup): Float64Array {
+function withInitial(
+  at: Float64Array,
+  unknowns: Unknowns,
+  group: ObservedGroup,
+  options: FitOptions,
+): Float64Array {
   const whole = new Float64Array(unknowns.names.length);
   whole.set(at);
   unknowns.roles.forEach((role, i) => {
     if (role !== "initial") return;
-    const state = rule.states[unknowns.columns[i]! - rule.constants.length]!;
-    const first = group.values[state]!.find((value) => Number.isFinite(value)) ?? 0;
-    whole[i] = Math.min(Math.max(first, unknowns.lower[i]!), unknowns.upper[i]!);
+    const [, state, period] = /^(.*)\[(\d+)\]$/.exec(unknowns.names[i]!)!;
+    const values = group.values[state!]!;
+    const recorded = group.index.indexOf(Number(period));
+    const first = recorded >= 0 ? values[recorded]! : values.find((value) => Number.isFinite(value));
+    const value = options.start?.[unknowns.names[i]!] ?? (Number.isFinite(first) ? first! : 0);
+    whole[i] = Math.min(Math.max(value, unknowns.lower[i]!), unknowns.upper[i]!);
   });
   return whole;
 }
 
-/** Combinations of trial values; a seeded sample of them when they are too many. */
-function trialPoints(
-  rule: Rule,
-  group: ObservedGroup,
-  options: FitOptions,
-  unknowns: Unknowns,
-): readonly Float64Array[] {
-  const scales = scalesOf(rule, group);
-  const choices = unknowns.names.map((name, i) => {
-    const given = options.start?.[name] ?? rule.guesses[name];
-    if (given !== undefined) return [given];
-    const inside = scales.filter((value) => value >= unknowns.lower[i]! && value <= unknowns.upper[i]!);
-    return inside.length > 0 ? inside : [boundedMiddle(unknowns.lower[i]!, unknowns.upper[i]!)];
+/** Gives every factor the value at which the record and the path agree in the mean. */
+function scaleFactors(at: Float64Array, unknowns: Unknowns, rows: FitRows): void {
+  unknowns.roles.forEach((role, i) => {
+    if (role === "factor") at[i] = 1;
   });
-  const total = choices.reduce((product, values) => product * values.length, 1);
-  if (total <= mostTrials) return everyCombination(choices, total);
-  const stream = randomStream(1);
-  return Array.from({ length: mostTrials }, () =>
-    Float64Array.from(choices, (values) => values[Math.floor(stream.uniform() * values.length)]!),
-  );
-}
-
-function everyCombination(choices: readonly (readonly number[])[], total: number): Float64Array[] {
-  return Array.from({ length: total }, (_, number) => {
-    let rest = number;
-    return Float64Array.from(choices, (values) => {
-      const value = values[rest % values.length]!;
-      rest = Math.floor(rest / values.length);
-      return value;
-    });
+  rows.prepare(at, false);
+  const logs = unknowns.factors.map(() => 0);
+  const counts = unknowns.factors.map(() => 0);
+  for (let k = 0; k < rows.count; k++) {
+    rows.residualAt(k);
+    const state = rows.states[k]!;
+    logs[state] = logs[state]! + Math.log(rows.observed[k]! / rows.fitted());
+    counts[state] = counts[state]! + 1;
+  }
+  const first = unknowns.constants.length + unknowns.initial.length;
+  unknowns.roles.forEach((role, i) => {
+    const state = unknowns.columns[i]! - first;
+    if (role === "factor") at[i] = Math.exp(logs[state]! / counts[state]!);
   });
-}
-
-/** Values that constants of plain rules tend to have: pure numbers, levels, changes and inverses of levels. */
-function scalesOf(rule: Rule, group: ObservedGroup): readonly number[] {
-  const pure = [0.02, 0.1, 0.3, 0.6, 0.9, 1.2, 2, 4, -0.1, -0.5, -1];
-  const own = rule.states.flatMap((state) => {
-    const values = group.values[state]!.filter((value) => Number.isFinite(value));
-    const size = values.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
-    const middle = values.slice().sort()[values.length >> 1] ?? size;
-    const change = (values[values.length - 1]! - values[0]!) / Math.max(1, values.length - 1);
-    return [size, 1.3 * size, 3 * size, middle, 0.1 * size, change, -change, 1 / size, 0.1 / size, -1 / size];
-  });
-  return [...new Set([...pure, ...own.filter((value) => Number.isFinite(value) && value !== 0)])];
-}
-
-function boundedMiddle(lower: number, upper: number): number {
-  if (Number.isFinite(lower) && Number.isFinite(upper)) return (lower + upper) / 2;
-  if (Number.isFinite(lower)) return lower + Math.max(1, Math.abs(lower)) / 2;
-  return Number.isFinite(upper) ? upper - Math.max(1, Math.abs(upper)) / 2 : 1;
 }

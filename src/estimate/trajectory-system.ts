@@ -1,17 +1,8 @@
 import type { LinearisedSystem } from "../numeric/index.js";
 import type { PathSums } from "../rule/index.js";
 import { factorSums } from "./factor-sums.js";
+import type { RecordedPath } from "./recorded-path.js";
 import { place, type Unknowns } from "./unknowns.js";
-
-/** A trajectory compared with a record by periods. */
-export interface RecordedPath {
-  readonly inputs: readonly Float64Array[];
-  readonly periods: number;
-  /** [periods + 1, states], on the fitting scale; anything where nothing is recorded. */
-  readonly observed: Float64Array;
-  /** [periods + 1, states]; 0 where nothing is recorded. */
-  readonly weights: Float64Array;
-}
 
 /**
  * The least-squares system of a trajectory fit, its sums gathered in the same pass as the path by `pathSums`.
@@ -19,7 +10,13 @@ export interface RecordedPath {
 export function trajectorySystem(
   pathSums: PathSums,
   unknowns: Unknowns,
-  { inputs, periods, observed, weights }: RecordedPath,
+  {
+    inputs,
+    first,
+    periods,
+    table,
+    weights,
+  }: Pick<RecordedPath, "inputs" | "first" | "periods" | "table" | "weights">,
 ): LinearisedSystem {
   const size = unknowns.columns.length;
   const { constants, initial } = unknowns;
@@ -37,7 +34,7 @@ export function trajectorySystem(
     projected,
     evaluate(at) {
       place(unknowns, at);
-      return pathSums(initial, constants, inputs, 0, periods, observed, weights, sums);
+      return pathSums(initial, constants, inputs, first, periods, table, weights, sums);
     },
     linearise() {
       for (let k = 0; k < gram.length; k++) gram[k] = sums[products[k]!]!;

@@ -1,6 +1,6 @@
+import type { Estimate } from "./estimate-of.js";
 import type { Fit } from "./fit.js";
 import type { FitPoint } from "./fit-points.js";
-import type { Estimate } from "./group-fit.js";
 
 /** A row of the estimates view: one unknown of one group. */
 export interface EstimateRow extends Omit<Estimate, "trace"> {

@@ -21,7 +21,7 @@ const workspace = squaresWorkspace(3);
 const system = trajectorySystem(
   compileRule(sheltered).pathSums!(false),
   unknownsOf(sheltered, { errors: "observation" }),
-  { inputs: [], periods: count - 1, observed, weights: new Float64Array(count).fill(1) },
+  { inputs: [], first: 0, periods: count - 1, table: observed, weights: new Float64Array(count).fill(1) },
 );
 const start = Float64Array.of(1.5, 500, 15);
 const fitOnce = (): void => {

@@ -1,0 +1,63 @@
+import { studentQuantile } from "../numeric/index.js";
+import type { Rule } from "../rule/index.js";
+import { type Interval, waldInterval } from "./interval.js";
+import type { Optimum } from "./optimum.js";
+import type { Profile } from "./profile-interval.js";
+import type { UnknownRole, Unknowns } from "./unknowns.js";
+
+/** One unknown of a fit. */
+export interface Estimate {
+  /** The constant's name, or "N[0]" for an initial state. */
+  readonly name: string;
+  readonly role: UnknownRole;
+  readonly unit: string;
+  readonly value: number;
+  /** Undefined where the record does not determine it. */
+  readonly standardError: number | undefined;
+  readonly profile: Interval;
+  readonly wald: Interval | undefined;
+  /** By increasing value: the increase over the optimum, in units of sigma^2; cut by `cut`. */
+  readonly trace: Profile["trace"];
+}
+
+/** How an unknown is reported: a spread is searched on the log scale, and reported on its own. */
+const natural = (role: UnknownRole, value: number): number => (role === "spread" ? Math.exp(value) : value);
+
+/** The estimates of an optimum, by unknown. */
+export function estimatesOf(
+  rule: Rule,
+  unknowns: Unknowns,
+  found: Optimum,
+  level: number,
+  degreesOfFreedom: number,
+): readonly Estimate[] {
+  const size = unknowns.names.length;
+  const student = studentQuantile((1 + level) / 2, degreesOfFreedom);
+  return unknowns.names.map((name, i) => {
+    const role = unknowns.roles[i]!;
+    const value = natural(role, found.at[i]!);
+    const error = Math.sqrt(found.covariance[i * size + i]!) * (role === "spread" ? value : 1);
+    const standardError = found.determined[i] && Number.isFinite(error) ? error : undefined;
+    const profile = found.profiles?.[i];
+    return {
+      name,
+      role,
+      unit: rule.units[name] ?? "",
+      value,
+      standardError,
+      profile: profile === undefined ? notComputed(level) : intervalOf(profile, role, level),
+      wald: waldInterval(value, standardError, student, level),
+      trace: (profile?.trace ?? []).map((at) => ({ ...at, value: natural(role, at.value) })),
+    };
+  });
+}
+
+function intervalOf({ lower, upper, note }: Profile, role: UnknownRole, level: number): Interval {
+  const limit = (value: number | undefined): number | undefined =>
+    value === undefined ? undefined : natural(role, value);
+  return { kind: "profile", level, lower: limit(lower), upper: limit(upper), note };
+}
+
+function notComputed(level: number): Interval {
+  return { kind: "profile", level, lower: undefined, upper: undefined, note: "not asked for" };
+}
