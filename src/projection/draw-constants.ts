@@ -1,4 +1,5 @@
 import { choleskyFactor, type RandomStream } from "../numeric/index.js";
+import { gammaDraw } from "./gamma-draw.js";
 
 /** Draws unknowns of a fit around their estimates; writes into `out`. */
 export type ConstantsDraw = (stream: RandomStream, out: Float64Array) => void;
@@ -20,22 +21,12 @@ export function constantsDraw(
   const normals = new Float64Array(size);
   return (stream, out) => {
     for (let i = 0; i < size; i++) normals[i] = stream.normal();
-    const widen = Math.sqrt(degreesOfFreedom / chiSquareDraw(stream, degreesOfFreedom));
+    const half = 0.5 * degreesOfFreedom;
+    const widen = Math.sqrt(half / gammaDraw(half, stream));
     for (let i = 0; i < size; i++) {
       let sum = 0;
       for (let k = 0; k <= i; k++) sum += factor[i * size + k]! * normals[k]!;
       out[i] = estimates[i]! + widen * sum;
     }
   };
-}
-
-/** Sum of squared normals; beyond 200 degrees of freedom by the cube-root normal of Wilson and Hilferty (1931). */
-function chiSquareDraw(stream: RandomStream, degreesOfFreedom: number): number {
-  if (degreesOfFreedom > 200) {
-    const spread = 2 / (9 * degreesOfFreedom);
-    return degreesOfFreedom * (1 - spread + Math.sqrt(spread) * stream.normal()) ** 3;
-  }
-  let sum = 0;
-  for (let i = 0; i < degreesOfFreedom; i++) sum += stream.normal() ** 2;
-  return sum;
 }

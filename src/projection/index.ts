@@ -1,3 +1,10 @@
 export type { Band } from "./band.js";
-export type { PathDraws } from "./draw-paths.js";
-export { type Forecast, type ForecastOptions, forecast, type GroupForecast } from "./forecast.js";
+export { type Forecast, type ForecastOptions, forecast } from "./forecast.js";
+export type { InputPlan, InputPlans } from "./input-plan.js";
+export type { Noise } from "./noise.js";
+export type { Direction, Passage, Watch } from "./passage.js";
+export type { PathDraws } from "./path-draws.js";
+export type { Predictability } from "./predictability.js";
+export type { GroupForecast, ProjectedState } from "./projected-group.js";
+export type { Scenarios } from "./scenarios.js";
+export { type SimulateOptions, type Simulation, simulate } from "./simulate.js";

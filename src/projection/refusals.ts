@@ -1,27 +1,82 @@
-import { ModelError } from "../numeric/index.js";
+import { ModelError, nearestNames } from "../numeric/index.js";
 
 export function refusePeriods(periods: number): ModelError {
   return new ModelError(
     "periods-not-whole",
-    `A forecast runs over a whole number of periods, at least 1; ${periods} was given.`,
+    `A projection runs over a whole number of periods, at least 1; ${periods} was given.`,
     { periods },
+  );
+}
+
+export function refusePaths(paths: number): ModelError {
+  return new ModelError(
+    "paths-not-whole",
+    `A projection draws a whole number of paths, at least 1; ${paths} was given.`,
+    { paths },
+  );
+}
+
+export function refuseLevel(level: number): ModelError {
+  return new ModelError(
+    "level-outside",
+    `A band has a level between 0 and 1, such as 0.95; ${level} was given.`,
+    {
+      level,
+    },
   );
 }
 
 export function refuseFutureInput(inputs: readonly string[], periods: number): ModelError {
   return new ModelError(
     "future-input-missing",
-    `The rule needs ${inputs.join(", ")} for the next ${periods} periods; supply a scenario.`,
+    `The rule needs ${inputs.join(", ")} for the next ${periods} periods; supply a scenario, such as inputs: { ${inputs[0]}: { usual: 0 } }.`,
     { inputs, periods },
   );
 }
 
-export function refuseUndetermined(group: string): ModelError {
+export function refuseUnknownInput(name: string, inputs: readonly string[]): ModelError {
+  const [near] = nearestNames(name, inputs);
+  const hint = near === undefined ? "" : ` Did you mean "${near}"?`;
+  return new ModelError(
+    "unknown-input",
+    `The rule has no input "${name}". It has: ${inputs.length === 0 ? "none" : inputs.join(", ")}.${hint}`,
+    { name, inputs },
+  );
+}
+
+export function refuseShortPlan(name: string, given: number, needed: number): ModelError {
+  return new ModelError(
+    "future-input-missing",
+    `The plan of ${name} has ${given} values and the projection needs ${needed}. Give one for each period, or { usual, from, at }.`,
+    { name, given, needed },
+  );
+}
+
+export function refusePlan(name: string, why: string): ModelError {
+  return new ModelError("plan-not-readable", `The plan of ${name} cannot be followed: ${why}.`, { name });
+}
+
+export function refuseNoScenario(): ModelError {
+  return new ModelError(
+    "no-scenario",
+    "The scenarios are empty. Name at least one, such as scenarios: { usual: { payment: 300 } }, or leave them out.",
+  );
+}
+
+export function refuseTwoPlans(): ModelError {
+  return new ModelError(
+    "two-plans",
+    "Both inputs and scenarios were given. Put what all scenarios share into each of them, and leave inputs out.",
+  );
+}
+
+export function refuseUndetermined(group: string, names: readonly string[]): ModelError {
+  const who = names.length === 0 ? "The constants" : names.join(" and ");
   return new ModelError(
     "constants-not-separated",
-    `The constants${group === "" ? "" : ` of "${group}"`} cannot be separated by this record, so no margin can be put on a ` +
+    `${who}${group === "" ? "" : ` of "${group}"`} cannot be separated by this record, so no margin can be put on a ` +
       "projection. Hold one with { fixed }, or use a rule with fewer constants.",
-    { group },
+    { group, names },
   );
 }
 
@@ -30,5 +85,43 @@ export function refuseNoPath(group: string, rule: string): ModelError {
     "no-finite-path",
     `"${rule}" leaves the finite range at the fitted constants${group === "" ? "" : ` of "${group}"`}: nothing can be projected.`,
     { group, rule },
+  );
+}
+
+export function refuseNoDraws(group: string): ModelError {
+  return new ModelError(
+    "no-draw-in-bounds",
+    `No drawn constants${group === "" ? "" : ` of "${group}"`} lie within their bounds: the bounds contradict the estimates. Widen { bounds } and fit again.`,
+    { group },
+  );
+}
+
+export function refuseGap(state: string, period: number): ModelError {
+  return new ModelError(
+    "history-missing",
+    `The rule reads ${state} at period ${period}, which the record does not hold; a projection cannot begin. Fit with errors: "observation", or supply the value.`,
+    { state, period },
+  );
+}
+
+export function refuseNoise(state: string, why: string): ModelError {
+  return new ModelError("noise-not-readable", `The random change of ${state} cannot be drawn: ${why}.`, {
+    state,
+  });
+}
+
+export function refuseKept(paths: number, periods: number): ModelError {
+  return new ModelError(
+    "too-many-paths",
+    `${paths} paths of ${periods} periods are too many to keep. Ask for fewer, or name what is to be watched: watch: [{ state, value, direction }].`,
+    { paths, periods },
+  );
+}
+
+export function refuseWatch(state: string, states: readonly string[]): ModelError {
+  return new ModelError(
+    "unknown-state",
+    `"${state}" cannot be watched: the rule's states are ${states.join(", ")}.`,
+    { state, states },
   );
 }

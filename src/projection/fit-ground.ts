@@ -1,0 +1,92 @@
+import type { Fit, GroupFit } from "../estimate/index.js";
+import type { ObservedGroup } from "../record/index.js";
+import { compileRule, type Rule } from "../rule/index.js";
+import type { Ground } from "./central-path.js";
+import type { InputPlans } from "./input-plan.js";
+import { plannedInputs } from "./planned-inputs.js";
+import { refuseGap } from "./refusals.js";
+
+/** A ground, and where the fit's unknowns stand in it. */
+export interface FitGround extends Ground {
+  readonly group: GroupFit;
+  readonly recorded: ObservedGroup;
+  /** Step index of the last recorded value. */
+  readonly recordEnd: number;
+  /** By unknown of the fit: slot among constants, then state vector; -1 where the path does not begin with it. */
+  readonly places: Int32Array;
+}
+
+/**
+ * Where the future of a fitted group begins: a trajectory at its own start, a chain of steps at the last recorded value.
+ *
+ * @param periods - beyond the last recorded one.
+ */
+export function fitGround(fit: Fit, group: GroupFit, periods: number, plans: InputPlans): FitGround {
+  const { rule, observations } = fit;
+  const recorded = observations.groups.find((each) => each.name === group.group)!;
+  const recordEnd = recorded.index[recorded.index.length - 1]!;
+  const trajectory = fit.options.errors === "observation";
+  const reach = Math.max(0, ...rule.memory.map(({ lag }) => lag));
+  const from = trajectory ? reach : recordEnd;
+  const slots = [...rule.states.map((state) => ({ state, lag: 0 })), ...rule.memory];
+  const names = slots.map(({ state, lag }) => `${state}[${reach - lag}]`);
+  const initial = Float64Array.from(slots, ({ state, lag }, s) =>
+    trajectory
+      ? fittedStart(fit, group, names[s]!, state, lag)
+      : recordedAt(recorded, state, recordEnd - lag),
+  );
+  const width = rule.constants.length;
+  const places = Int32Array.from(group.estimates, ({ name, role }) => {
+    if (role === "constant") return rule.constants.indexOf(name);
+    const slot = names.indexOf(name);
+    return slot < 0 || !trajectory ? -1 : width + slot;
+  });
+  return {
+    rule,
+    compiled: compileRule(rule),
+    constants: Float64Array.from(rule.constants, (name) => group.constants[name]!),
+    initial,
+    inputs: fittedInputs(rule, recorded, recordEnd, periods, plans),
+    from,
+    periods: recordEnd + periods - from,
+    group,
+    recorded,
+    recordEnd,
+    places,
+  };
+}
+
+function fittedStart(fit: Fit, group: GroupFit, name: string, state: string, lag: number): number {
+  const estimated = group.estimates.find((estimate) => estimate.name === name);
+  if (estimated !== undefined) return estimated.value;
+  const given = fit.options.initial?.[state] ?? group.initial[state]!;
+  return typeof given === "number" ? given : given[given.length - 1 - lag]!;
+}
+
+function recordedAt(recorded: ObservedGroup, state: string, period: number): number {
+  const row = recorded.index.indexOf(period);
+  const value = row < 0 ? Number.NaN : recorded.values[state]![row]!;
+  if (!Number.isFinite(value)) throw refuseGap(state, period);
+  return value;
+}
+
+function fittedInputs(
+  rule: Rule,
+  recorded: ObservedGroup,
+  recordEnd: number,
+  periods: number,
+  plans: InputPlans,
+): readonly Float64Array[] {
+  return plannedInputs(rule, plans, {
+    recorded: (input) => {
+      const column = new Float64Array(recordEnd + 1).fill(Number.NaN);
+      recorded.index.forEach((period, row) => {
+        column[period] = recorded.inputs[input]?.[row] ?? Number.NaN;
+      });
+      return column;
+    },
+    rows: recordEnd + 1,
+    last: recordEnd + periods,
+    firstNumber: 1,
+  });
+}

@@ -1,0 +1,166 @@
+import type { Fit, GroupFit } from "../estimate/index.js";
+import type { RandomStream } from "../numeric/index.js";
+import { readsPeriod } from "../rule/index.js";
+import { type CentralPath, centralPath, stateLimits } from "./central-path.js";
+import { keepLimit } from "./check-run.js";
+import { type DrawnStarts, drawnStarts, type UnknownsDraw, unknownsDraw } from "./drawn-starts.js";
+import { blockStreams, type EnsembleRun, runEnsemble } from "./ensemble.js";
+import { type FitGround, fitGround } from "./fit-ground.js";
+import { fittedNoise } from "./fitted-noise.js";
+import type { ForecastOptions, ForecastSettings } from "./forecast.js";
+import { forecastWarnings } from "./forecast-warnings.js";
+import { type Gatherer, gatherer } from "./gather.js";
+import type { InputPlans } from "./input-plan.js";
+import { noiseDraw } from "./noise.js";
+import { passagesOf, placedWatches } from "./placed-watches.js";
+import { type Predictability, predictabilityOf } from "./predictability.js";
+import type { GroupForecast } from "./projected-group.js";
+import { refuseNoPath } from "./refusals.js";
+
+type Settled = ForecastOptions & ForecastSettings;
+
+/** Carries one group forward under every scenario, with the same random numbers in each. */
+export function forecastGroup(
+  fit: Fit,
+  group: GroupFit,
+  scenarios: readonly { readonly name: string; readonly plans: InputPlans }[],
+  options: Settled,
+  stream: RandomStream,
+): readonly GroupForecast[] {
+  const grounds = scenarios.map(({ plans }) => fitGround(fit, group, options.periods, plans));
+  const source = unknownsDraw(fit, group);
+  const seeds = blockStreams(stream, options.paths);
+  return grounds.map((ground, i) => projected(fit, ground, scenarios[i]!.name, options, source, seeds));
+}
+
+function projected(
+  fit: Fit,
+  ground: FitGround,
+  scenario: string,
+  options: Settled,
+  source: UnknownsDraw,
+  seeds: readonly RandomStream[],
+): GroupForecast {
+  const { rule, observations } = fit;
+  const { group, from, recordEnd, periods } = ground;
+  const central = centralPath(ground);
+  if (central.stop !== undefined && central.stop.row + from <= recordEnd)
+    throw refuseNoPath(group.group, rule.text);
+  // A jump leaves the stream where it is, so every scenario begins with the same numbers.
+  const streams = seeds.map((each) => each.jump());
+  const starts = drawnStarts(fit, ground, source, options.paths, streams);
+  const { mean, future } = runBoth(fit, ground, starts, options, streams);
+  const means = mean.states();
+  const futures = future.states();
+  const left = future.ended[periods]! / options.paths;
+  const ahead = recordEnd - from + 1;
+  const predictability = predicted(ground, starts, means[0]!.standardDeviation[ahead]!);
+  const shown = withHorizon(central, predictability, recordEnd - from);
+  const index = Array.from({ length: periods + 1 }, (_, t) => from + t);
+  const step = observations.period.step.every;
+  return {
+    group: group.group,
+    scenario,
+    index,
+    time: index.map((t) => ground.recorded.time[0]! + t * step),
+    recordEnd,
+    states: rule.states.map((state, s) => ({
+      state,
+      unit: observations.states.find((each) => each.name === state)!.unit,
+      central: shown[s]!,
+      median: futures[s]!.median,
+      bands: [...means[s]!.bands, ...futures[s]!.bands],
+    })),
+    draws: {
+      paths: options.paths,
+      periods,
+      mean: means.flatMap((state) => state.paths ?? []),
+      future: futures.flatMap((state) => state.paths ?? []),
+      discarded: starts.discarded,
+    },
+    passages: passagesOf(placedWatches(rule, options.watch), passagesFor(fit, mean, future)),
+    left,
+    leftError: Math.sqrt((left * (1 - left)) / options.paths),
+    ...(predictability && { predictability }),
+    warnings: forecastWarnings({
+      group,
+      starts,
+      central,
+      left,
+      predictability,
+      ground,
+      asked: options.periods,
+    }),
+  };
+}
+
+/** The same starts run twice: by the rule alone, and with the errors of single periods or readings. */
+function runBoth(
+  fit: Fit,
+  ground: FitGround,
+  starts: DrawnStarts,
+  options: Settled,
+  streams: readonly RandomStream[],
+): { mean: Gatherer; future: Gatherer } {
+  const { rule } = fit;
+  const none = rule.states.map(() => undefined);
+  const gathered = (kind: "mean path" | "future observation"): Gatherer =>
+    gatherer({
+      kind,
+      levels: options.levels,
+      states: rule.states.length,
+      paths: starts.paths,
+      periods: ground.periods,
+      keep: starts.paths * (ground.periods + 1) * rule.states.length <= keepLimit,
+      watches: placedWatches(rule, options.watch),
+    });
+  const mean = gathered("mean path");
+  const future = gathered("future observation");
+  const half = (part: number) => (done: number, of: number) => options.onProgress?.(part * of + done, 2 * of);
+  const run: Omit<EnsembleRun, "change" | "reading" | "onRow"> = {
+    compiled: ground.compiled,
+    states: rule.states.length,
+    width: ground.initial.length,
+    inputs: ground.inputs,
+    from: ground.from,
+    periods: ground.periods,
+    starts,
+    limits: stateLimits(rule),
+    streams,
+  };
+  const { change, reading } = fittedNoise(fit, ground.group);
+  runEnsemble({ ...run, change: none, reading: none, onRow: mean.onRow, onProgress: half(0) });
+  runEnsemble({
+    ...run,
+    change: change.map((noise) => noise && noiseDraw(noise)),
+    reading: reading.map((noise) => noise && noiseDraw(noise)),
+    onRow: future.onRow,
+    onProgress: half(1),
+  });
+  return { mean, future };
+}
+
+/** An answer about the process is read from the process: with reading errors, from the paths without them. */
+function passagesFor(fit: Fit, mean: Gatherer, future: Gatherer): readonly Float64Array[] {
+  return fit.options.errors === "observation" ? mean.passages : future.passages;
+}
+
+function predicted(ground: FitGround, starts: DrawnStarts, firstError: number): Predictability | undefined {
+  const { rule, compiled, constants, initial } = ground;
+  if (rule.inputs.length > 0 || readsPeriod(rule)) return undefined;
+  const own = { paths: 1, size: constants.length, constants, initial };
+  return predictabilityOf(compiled, initial.length, own, starts, firstError);
+}
+
+/** The central path up to the horizon of predictability. */
+function withHorizon(
+  central: CentralPath,
+  predictability: Predictability | undefined,
+  recordEnd: number,
+): CentralPath["values"] {
+  const horizon = predictability?.horizon;
+  if (horizon === undefined) return central.values;
+  return central.values.map((values) =>
+    values.map((value, t) => (t <= recordEnd + horizon ? value : Number.NaN)),
+  );
+}

@@ -1,0 +1,88 @@
+import type { GroupFit } from "../estimate/index.js";
+import type { Warning } from "../numeric/index.js";
+import type { CentralPath } from "./central-path.js";
+import type { DrawnStarts } from "./drawn-starts.js";
+import type { FitGround } from "./fit-ground.js";
+import type { Predictability } from "./predictability.js";
+import { rangeWarnings } from "./range-warnings.js";
+
+/** What the warnings are read from. */
+export interface WarningSource {
+  readonly group: GroupFit;
+  readonly ground: FitGround;
+  readonly starts: DrawnStarts;
+  readonly central: CentralPath;
+  readonly left: number;
+  readonly predictability: Predictability | undefined;
+  /** Periods asked for beyond the record. */
+  readonly asked: number;
+}
+
+/** Share of positive exponents from which a reader is told. */
+const worthTelling = 0.05;
+
+/** What a reader of a forecast must know. */
+export function forecastWarnings(source: WarningSource): Warning[] {
+  const { central, left, starts, ground } = source;
+  return [
+    ...openConstants(source),
+    ...discardedDraws(starts),
+    ...rangeWarnings(central, ground.from, left, starts.paths),
+    ...beyondRecord(source),
+    ...partingPaths(source.predictability),
+  ];
+}
+
+function openConstants({ group, starts }: WarningSource): Warning[] {
+  const open = group.estimates.filter((estimate) => estimate.standardError === undefined);
+  if (open.length === 0) return [];
+  const names = open.map((estimate) => estimate.name).join(", ");
+  return [
+    {
+      code: "constants-not-determined",
+      message: `The record does not determine ${names}: constants were drawn ${starts.method}${starts.followed === undefined ? "" : ` of ${starts.followed}`}, and where the bands have no end the record gives none.`,
+    },
+  ];
+}
+
+function discardedDraws({ discarded, paths }: DrawnStarts): Warning[] {
+  if (discarded <= 0.01 * paths) return [];
+  return [
+    {
+      code: "draws-discarded",
+      message: `${discarded} draws were discarded because a constant left its bounds, for ${paths} kept: near a bound the bands are cut.`,
+    },
+  ];
+}
+
+function beyondRecord({ asked, ground }: WarningSource): Warning[] {
+  const observed = ground.recordEnd;
+  if (asked <= observed) return [];
+  return [
+    {
+      code: "longer-than-record",
+      message: `Projection of ${asked} periods from ${observed} observed: treat beyond ${observed} as conditional.`,
+    },
+  ];
+}
+
+function partingPaths(found: Predictability | undefined): Warning[] {
+  if (found === undefined || found.chaotic < worthTelling) return [];
+  const share = `P(exponent > 0) = ${found.chaotic.toFixed(2)} (Monte-Carlo error ${found.chaoticError.toPrecision(1)})`;
+  if (found.horizon === undefined)
+    return [
+      {
+        code: "perhaps-chaotic",
+        message: `${share}: nearby paths may part, so read the bands and not the path.`,
+      },
+    ];
+  const { lower, upper } = found.longRun!;
+  return [
+    {
+      code: "chaotic",
+      message:
+        `Long-range point projection is meaningless when the exponent is positive; ${share}. The point path ends ` +
+        `${found.horizon} periods ahead; after that 95% of values lie from ${lower.toPrecision(3)} to ${upper.toPrecision(3)}, whatever the start.`,
+    },
+  ];
+}

@@ -1,0 +1,40 @@
+import type { Warning } from "../numeric/index.js";
+import type { Band } from "./band.js";
+import type { Passage } from "./passage.js";
+import type { PathDraws } from "./path-draws.js";
+import type { Predictability } from "./predictability.js";
+
+/** One state of a projection. All series run over the group's `index`. */
+export interface ProjectedState {
+  readonly state: string;
+  readonly unit: string;
+  /** The path at the estimates, or at the given constants, without random change; NaN after it has left its range. */
+  readonly central: readonly number[];
+  /** The middle of the drawn paths that carry every error. */
+  readonly median: readonly number[];
+  readonly bands: readonly Band[];
+}
+
+/** One group of a record, or one scenario of inputs, carried forward. */
+export interface GroupForecast {
+  /** "" where there is a single group. */
+  readonly group: string;
+  /** "" where there is a single scenario. */
+  readonly scenario: string;
+  /** Step indexes: from period 0 for a trajectory fit, from the last recorded one for a one-step fit. */
+  readonly index: readonly number[];
+  /** The period column's values there. */
+  readonly time: readonly number[];
+  /** Step index of the last recorded value; of the first value in a simulation. */
+  readonly recordEnd: number;
+  readonly states: readonly ProjectedState[];
+  readonly draws: PathDraws;
+  /** First passages of what was watched. */
+  readonly passages: readonly Passage[];
+  /** Share of paths that had left their range by the end, and its Monte-Carlo error. */
+  readonly left: number;
+  readonly leftError: number;
+  /** How far ahead a single path means anything; absent where inputs or the period index drive the rule. */
+  readonly predictability?: Predictability;
+  readonly warnings: readonly Warning[];
+}

@@ -1,0 +1,166 @@
+import { constantsBySlot, type InitialValues, initialVector } from "../dynamics/index.js";
+import { randomStream } from "../numeric/index.js";
+import { compileRule, type ProcessNoise, type Rule } from "../rule/index.js";
+import { centralPath, type Ground, stateLimits } from "./central-path.js";
+import { checkRun, keepLimit } from "./check-run.js";
+import { blockStreams, runEnsemble } from "./ensemble.js";
+import { gatherer } from "./gather.js";
+import type { InputPlans } from "./input-plan.js";
+import { type Noise, noiseDraw } from "./noise.js";
+import type { Watch } from "./passage.js";
+import { passagesOf, placedWatches } from "./placed-watches.js";
+import { plannedInputs } from "./planned-inputs.js";
+import type { GroupForecast } from "./projected-group.js";
+import { rangeWarnings } from "./range-warnings.js";
+import { ruleNoise } from "./rule-noise.js";
+import { type Scenarios, scenariosOf } from "./scenarios.js";
+
+/** Options of `simulate`. */
+export interface SimulateOptions {
+  /** By constant; those the rule holds fixed may be left out. */
+  readonly constants?: Readonly<Record<string, number>>;
+  /** By state; those the rule states may be left out. With lags a list, oldest first. */
+  readonly initial?: InitialValues;
+  readonly periods: number;
+  /** By input, period 0 first. */
+  readonly inputs?: InputPlans;
+  /** Several plans of inputs side by side, run with the same random numbers. */
+  readonly scenarios?: Scenarios;
+  /** By state: the random change of each period; default what the rule says. */
+  readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
+  /** By state: the error of a reading, reported and not carried on. */
+  readonly reading?: Readonly<Record<string, Noise>>;
+  /** Default 4000, or 1 where nothing is random. */
+  readonly paths?: number;
+  /** Levels of the bands; default 0.5, 0.8, 0.95. */
+  readonly levels?: readonly number[];
+  /** Seed of the draws; default 1. */
+  readonly seed?: number;
+  /** Values whose first passage is followed, for more paths than can be kept. */
+  readonly watch?: readonly Watch[];
+  /** Called now and then with what is done; what it throws ends the run. */
+  readonly onProgress?: (done: number, of: number) => void;
+}
+
+/** Paths of a rule at given constants, with bands across them. */
+export interface Simulation {
+  readonly kind: "simulation";
+  readonly rule: Rule;
+  readonly constants: Readonly<Record<string, number>>;
+  readonly options: {
+    readonly periods: number;
+    readonly paths: number;
+    readonly seed: number;
+    readonly levels: readonly number[];
+  };
+  /** One a scenario. */
+  readonly groups: readonly GroupForecast[];
+}
+
+/**
+ * Runs a rule from given constants: one path without random change, and many with it, period by period.
+ *
+ * Paths run in blocks of 1024, each with its own stream: more periods leave the earlier numbers as they are, more paths
+ * the earlier whole blocks, and scenarios meet the same random numbers. Memory holds one value a path and state, so a million paths fit; the
+ * paths themselves are kept where there are at most five million values.
+ *
+ * @returns by scenario the central path, median, bands [periods + 1] in the state's unit, and first passages.
+ * @throws {ModelError} `periods-not-whole` | `paths-not-whole` | `missing-value` | `unknown-name` |
+ *   `future-input-missing` | `noise-not-readable`.
+ * @example
+ * const rule = recurrence("N[t+1] = R*N");
+ * simulate(rule, { constants: { R: 1.1 }, initial: { N: 100 }, periods: 10, noise: { N: { kind: "lognormal", sd: 0.2 } } });
+ */
+export function simulate(rule: Rule, options: SimulateOptions): Simulation {
+  const { periods, levels = [0.5, 0.8, 0.95], seed = 1 } = options;
+  const constants = constantsBySlot(rule, options.constants);
+  const change = ruleNoise(rule, constants, options.noise);
+  const random = change.some((noise) => noise !== undefined) || options.reading !== undefined;
+  const paths = options.paths ?? (random ? 4000 : 1);
+  checkRun(periods, paths, levels);
+  const initial = initialVector(rule, options.initial);
+  const compiled = compileRule(rule);
+  const settings = { periods, paths, seed, levels };
+  const groups = scenariosOf(options).map(({ name, plans }) => {
+    const inputs = plannedInputs(rule, plans, { recorded: () => [], rows: 0, last: periods, firstNumber: 0 });
+    const ground = { rule, compiled, constants, initial, inputs, from: 0, periods };
+    return simulated(ground, name, { ...options, ...settings }, change);
+  });
+  return Object.freeze({
+    kind: "simulation",
+    rule,
+    constants: Object.freeze(Object.fromEntries(rule.constants.map((name, i) => [name, constants[i]!]))),
+    options: Object.freeze(settings),
+    groups: Object.freeze(groups),
+  });
+}
+
+type Settled = SimulateOptions & Required<Pick<SimulateOptions, "paths" | "seed" | "levels">>;
+
+function simulated(
+  ground: Ground,
+  scenario: string,
+  options: Settled,
+  change: readonly (Noise | undefined)[],
+): GroupForecast {
+  const { rule, compiled, periods } = ground;
+  const { paths } = options;
+  const central = centralPath(ground);
+  const watches = placedWatches(rule, options.watch);
+  const keep = paths * (periods + 1) * rule.states.length <= keepLimit;
+  const found = gatherer({
+    kind: "simulated path",
+    levels: options.levels,
+    states: rule.states.length,
+    paths,
+    periods,
+    keep,
+    watches,
+  });
+  runEnsemble({
+    compiled,
+    states: rule.states.length,
+    width: ground.initial.length,
+    inputs: ground.inputs,
+    from: 0,
+    periods,
+    starts: { paths, size: ground.constants.length, constants: ground.constants, initial: ground.initial },
+    change: change.map((noise) => noise && noiseDraw(noise)),
+    reading: rule.states.map((state) => {
+      const noise = options.reading?.[state];
+      return noise && noiseDraw(noise);
+    }),
+    limits: stateLimits(rule),
+    streams: blockStreams(randomStream(options.seed), paths),
+    onRow: found.onRow,
+    ...(options.onProgress && { onProgress: options.onProgress }),
+  });
+  const states = found.states();
+  const index = Array.from({ length: periods + 1 }, (_, t) => t);
+  const left = found.ended[periods]! / paths;
+  return {
+    group: "",
+    scenario,
+    index,
+    time: index,
+    recordEnd: 0,
+    states: rule.states.map((state, s) => ({
+      state,
+      unit: rule.units[state] ?? "",
+      central: central.values[s]!,
+      median: states[s]!.median,
+      bands: states[s]!.bands,
+    })),
+    draws: {
+      paths,
+      periods,
+      mean: [],
+      future: keep ? states.map((state) => state.paths!) : [],
+      discarded: 0,
+    },
+    passages: passagesOf(watches, found.passages),
+    left,
+    leftError: Math.sqrt((left * (1 - left)) / paths),
+    warnings: rangeWarnings(central, 0, left, paths),
+  };
+}
