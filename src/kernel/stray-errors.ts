@@ -15,6 +15,11 @@ export function surviveStrayErrors(kernel: KernelState): void {
   };
   process.on("uncaughtException", tell);
   process.on("unhandledRejection", tell);
+  // Node says of functions that this kernel relies on that they are experimental: nothing to tell a reader.
+  process.removeAllListeners("warning");
+  process.on("warning", (warning) => {
+    if (warning.name !== "ExperimentalWarning") process.stderr.write(`${warning.name}: ${warning.message}\n`);
+  });
   // A front end interrupts by message. The signal itself only ends synchronous code, which Node does by itself
   // while such code runs; at any other time it must not end the process.
   process.on("SIGINT", () => undefined);

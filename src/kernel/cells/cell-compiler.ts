@@ -6,6 +6,7 @@ import { type CellTypescript, cellTypescript } from "./cell-typescript.js";
 import type { OwnPackage } from "./installation.js";
 import { needsNodeTypes } from "./node-types.js";
 import type { PlaceFinder } from "./source-places.js";
+import { hasTopLevelForAwait } from "./top-level-for-await.js";
 
 const load = createRequire(__filename);
 
@@ -42,14 +43,16 @@ export function cellCompiler(folder: string, packages: readonly OwnPackage[]): C
   const { createConverter } = load("tslab/dist/converter") as typeof import("tslab/dist/converter");
   const converter = createConverter();
   const prepare = (text: string): void => {
-    typescript.files.refresh();
+    if (typescript.files.refresh()) typescript.resolution.forget();
     if (needsNodeTypes(text)) typescript.addNodeTypes();
   };
   return {
     library: typescript.library,
     compile: (declarations, text) => {
       prepare(text);
-      return compiledCell(typescript, converter.convert(declarations, text));
+      const converted = converter.convert(declarations, text);
+      typescript.resolution.remembered();
+      return compiledCell(typescript, text, converted);
     },
     complete: (declarations, text, position) => {
       prepare(text);
@@ -62,15 +65,19 @@ export function cellCompiler(folder: string, packages: readonly OwnPackage[]): C
   };
 }
 
-function compiledCell(typescript: CellTypescript, converted: ReturnType<Converter["convert"]>): CompiledCell {
+function compiledCell(
+  typescript: CellTypescript,
+  text: string,
+  converted: ReturnType<Converter["convert"]>,
+): CompiledCell {
   if (converted.diagnostics.length > 0) throw new CellError(converted.diagnostics.map(complaint));
   const code = converted.output ?? "";
   return {
     code,
     declarations: converted.declOutput ?? "",
-    usesAwait: converted.hasToplevelAwait === true,
+    usesAwait: converted.hasToplevelAwait === true || hasTopLevelForAwait(typescript.library, text),
     lastValue: converted.lastExpressionVar,
-    findPlace: withoutPrefix(typescript.finderOf(code)),
+    findPlace: ofCell(typescript.finderOf(code), code.split("\n").length),
     modules: (converted.sideOutputs ?? []).map(({ path, data }) => ({
       path,
       code: data,
@@ -79,11 +86,11 @@ function compiledCell(typescript: CellTypescript, converted: ReturnType<Converte
   };
 }
 
-/** The converter puts one line of its own before the text of a cell. */
-function withoutPrefix(find: PlaceFinder | undefined): PlaceFinder | undefined {
+/** The converter puts one line of its own before the text of a cell, and what runs has more after the code. */
+function ofCell(find: PlaceFinder | undefined, codeLines: number): PlaceFinder | undefined {
   if (find === undefined) return undefined;
   return (generated) => {
-    const place = find(generated);
+    const place = generated.line <= codeLines ? find(generated) : undefined;
     return place && place.line > 1 ? { line: place.line - 1, column: place.column } : undefined;
   };
 }

@@ -1,7 +1,8 @@
 import { createRequire } from "node:module";
 import type { Converter, ConvertResult } from "tslab/dist/converter";
-import { type CellCompiler, type CompiledCell, cellCompiler } from "./cell-compiler.js";
+import { type CellCompiler, type CompiledCell, type CompiledModule, cellCompiler } from "./cell-compiler.js";
 import { Interrupted } from "./cell-error.js";
+import { changedModules } from "./changed-modules.js";
 import { ownPackages } from "./installation.js";
 import { installOwnModules, type Preloaded } from "./own-modules.js";
 import { modulePreloader } from "./preload-modules.js";
@@ -34,6 +35,7 @@ export function cellSession(folder: string, sources: SourceRegister): CellSessio
   installOwnModules(folder, packages, preloaded);
   const preload = modulePreloader(folder, preloaded);
   const compiler = cellCompiler(folder, packages);
+  const changed = changedModules();
   const { createExecutor } = load("tslab/dist/executor") as typeof import("tslab/dist/executor");
 
   let declarations = "";
@@ -61,8 +63,9 @@ export function cellSession(folder: string, sources: SourceRegister): CellSessio
         const cell = compiler.compile(declarations, text);
         sources.add({ name, label, text, findPlace: cell.findPlace });
         for (const { path, findPlace } of cell.modules) sources.add({ name: path, label: path, findPlace });
+        const modules = changed.withDependents(cell.modules);
         await preload([cell.code, ...cell.modules.map(({ code }) => code)]);
-        prepared = executable(cell, name);
+        prepared = executable(cell, modules, name);
         const before = { ...executor.locals };
         if (await executor.execute("")) declarations = cell.declarations;
         else restore(executor.locals, before, cell);
@@ -75,7 +78,7 @@ export function cellSession(folder: string, sources: SourceRegister): CellSessio
 }
 
 /** The cell as the executor takes it, with its name for stack traces. */
-function executable(cell: CompiledCell, name: string): ConvertResult {
+function executable(cell: CompiledCell, modules: readonly CompiledModule[], name: string): ConvertResult {
   const { code, usesAwait } = cell;
   // A map counts the lines of the code alone, so what goes around it stays on a line of its own.
   const body = usesAwait ? `await ${followName}((async () => {\n${code}\n})())` : `\n${code}`;
@@ -84,7 +87,7 @@ function executable(cell: CompiledCell, name: string): ConvertResult {
     declOutput: cell.declarations,
     diagnostics: [],
     hasToplevelAwait: usesAwait,
-    sideOutputs: cell.modules.map((module) => ({ path: module.path, data: module.code })),
+    sideOutputs: modules.map((module) => ({ path: module.path, data: module.code })),
     ...(cell.lastValue === undefined ? {} : { lastExpressionVar: cell.lastValue }),
   };
 }

@@ -2,6 +2,7 @@ import { createRequire } from "node:module";
 import { dirname, join, parse, relative } from "node:path";
 import type ts from "typescript-cell";
 import { cellGlobals, smallNodeGlobals } from "./cell-globals.js";
+import { type CellResolution, cellResolution } from "./cell-resolution.js";
 import type { OwnPackage } from "./installation.js";
 import { loopChecks } from "./loop-checks.js";
 import { type PlaceFinder, placeFinder, splitInlineMap } from "./source-places.js";
@@ -15,6 +16,7 @@ const libraryPath = load.resolve("@tslab/typescript-for-tslab", { paths: [conver
 export interface CellTypescript {
   readonly library: typeof ts;
   readonly files: WatchedFiles;
+  readonly resolution: CellResolution;
   /** From now on cells may name everything that Node declares. */
   readonly addNodeTypes: () => void;
   /** How places in this generated code lead back to its source; told once. */
@@ -28,6 +30,7 @@ export interface CellTypescript {
 export function cellTypescript(folder: string, packages: readonly OwnPackage[]): CellTypescript {
   const real = load(libraryPath) as typeof ts;
   const files = watchedFiles(real, folder);
+  const resolution = cellResolution(real, folder, real.sys);
   const globalsFile = join(folder, "__globals__.d.ts").replaceAll("\\", "/");
   let nodeTypes = false;
   const globals = (): string =>
@@ -39,17 +42,22 @@ export function cellTypescript(folder: string, packages: readonly OwnPackage[]):
     sys: {
       ...real.sys,
       watchFile: files.watchFile,
-      watchDirectory: files.watchDirectory,
+      watchDirectory: () => ({ close: () => undefined }),
       readFile: (path: string, encoding?: string) =>
         path === globalsFile ? globals() : real.sys.readFile(path, encoding),
       fileExists: (path: string) => path === globalsFile || real.sys.fileExists(path),
     },
-    createWatchCompilerHost: (roots: string[], options: ts.CompilerOptions, ...rest: unknown[]) =>
-      Reflect.apply(real.createWatchCompilerHost, undefined, [
-        [...roots, globalsFile],
-        { ...options, ...cellOptions(real, packages) },
-        ...rest,
-      ]),
+    createWatchCompilerHost: (roots: string[], given: ts.CompilerOptions, ...rest: unknown[]) => {
+      const options = { ...given, ...cellOptions(real, packages) };
+      const host: ts.WatchCompilerHost<ts.BuilderProgram> = Reflect.apply(
+        real.createWatchCompilerHost,
+        undefined,
+        [[...roots, globalsFile], options, ...rest],
+      );
+      host.resolveModuleNames = (names, from) => resolution.resolve(names, from, options);
+      host.hasInvalidatedResolutions = resolution.isForgotten;
+      return host;
+    },
     transpileModule: (code: string, options: ts.TranspileOptions) => transpile(real, finders, code, options),
   };
   const module = load.cache[libraryPath];
@@ -57,6 +65,7 @@ export function cellTypescript(folder: string, packages: readonly OwnPackage[]):
   return {
     library: real,
     files,
+    resolution,
     addNodeTypes: () => {
       if (nodeTypes) return;
       nodeTypes = true;

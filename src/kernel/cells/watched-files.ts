@@ -1,4 +1,5 @@
 import { statSync } from "node:fs";
+import { dirname, join } from "node:path";
 import type ts from "typescript-cell";
 
 /**
@@ -8,59 +9,57 @@ import type ts from "typescript-cell";
  */
 export interface WatchedFiles {
   readonly watchFile: NonNullable<ts.System["watchFile"]>;
-  readonly watchDirectory: NonNullable<ts.System["watchDirectory"]>;
-  /** Reports the changed files; `changed` is what to tell the compiler about a file that changed elsewhere. */
-  readonly refresh: () => readonly string[];
+  /** Reports changed files to the compiler; true when files came or went, so that an import may mean another. */
+  readonly refresh: () => boolean;
   readonly report: (path: string) => void;
 }
 
-interface Watched<Callback> {
-  readonly callback: Callback;
+interface Watched {
+  readonly callback: ts.FileWatcherCallback;
   stamp: number;
 }
 
 export function watchedFiles(library: typeof ts, folder: string): WatchedFiles {
-  const files = new Map<string, Watched<ts.FileWatcherCallback>>();
-  const folders = new Map<string, Watched<ts.DirectoryWatcherCallback>>();
-  const isOurs = (path: string): boolean => path.startsWith(folder);
+  const files = new Map<string, Watched>();
+  const folders = new Map([folder, join(folder, "node_modules")].map((path) => [path, stampOf(path)]));
+  const isBeside = (path: string): boolean => path.startsWith(folder) && !path.includes("/node_modules/");
   const report = (path: string): void =>
     files.get(path)?.callback(path, library.FileWatcherEventKind.Changed);
+  const reportChanged = (): void => {
+    for (const [path, watched] of files) {
+      const stamp = isBeside(path) ? stampOf(path) : watched.stamp;
+      if (stamp === watched.stamp) continue;
+      watched.stamp = stamp;
+      report(path);
+    }
+  };
+  const foldersChanged = (): boolean => {
+    const changed = [...folders].filter(([path, stamp]) => stampOf(path) !== stamp);
+    for (const [path] of changed) folders.set(path, stampOf(path));
+    return changed.length > 0;
+  };
   return {
-    watchFile: (path, callback) => keep(files, path, callback, isOurs(path)),
-    watchDirectory: (path, callback) => keep(folders, path, callback, isOurs(path)),
+    watchFile: (path, callback) => {
+      const watched = { callback, stamp: isBeside(path) ? stampOf(path) : 0 };
+      files.set(path, watched);
+      if (isBeside(path) && !folders.has(dirname(path))) folders.set(dirname(path), stampOf(dirname(path)));
+      return {
+        close: () => {
+          if (files.get(path) === watched) files.delete(path);
+        },
+      };
+    },
     report,
     refresh: () => {
-      const changed = newer(files, (path) => isOurs(path) && !path.includes("/node_modules/"));
-      for (const path of changed) report(path);
-      // A new or removed file beside the notebook can change what an import means.
-      for (const path of newer(folders, isOurs)) folders.get(path)?.callback(`${path}/package.json`);
-      return changed;
+      reportChanged();
+      return foldersChanged();
     },
   };
 }
 
-function keep<C>(map: Map<string, Watched<C>>, path: string, callback: C, stamped: boolean): ts.FileWatcher {
-  const watched = { callback, stamp: stamped ? stampOf(path) : 0 };
-  map.set(path, watched);
-  return {
-    close: () => {
-      if (map.get(path) === watched) map.delete(path);
-    },
-  };
-}
-
-function newer<C>(map: Map<string, Watched<C>>, isWanted: (path: string) => boolean): string[] {
-  const changed: string[] = [];
-  for (const [path, watched] of map) {
-    if (!isWanted(path)) continue;
-    const stamp = stampOf(path);
-    if (stamp !== watched.stamp) changed.push(path);
-    watched.stamp = stamp;
-  }
-  return changed;
-}
-
+/** Changes whenever the file does; 0 for none. A folder's own time changes when entries come or go. */
 function stampOf(path: string): number {
   const stat = statSync(path, { throwIfNoEntry: false });
-  return stat === undefined ? 0 : stat.mtimeMs + stat.size;
+  if (stat === undefined) return 0;
+  return stat.isDirectory() ? stat.mtimeMs : stat.mtimeMs + stat.size;
 }
