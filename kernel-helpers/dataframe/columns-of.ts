@@ -1,5 +1,5 @@
 import type { DataFrame } from "danfojs-node";
-import { type Column, type ColumnTable, isColumnTable, tableOf } from "../../src/record/index.js";
+import { type ColumnTable, isColumnTable, packed, tableOf, tableOfRows } from "../../src/record/index.js";
 import { isFrame } from "./danfo.js";
 import { notesOf } from "./frame-notes.js";
 import { notARecord } from "./refusals.js";
@@ -33,31 +33,12 @@ function columnsOfFrame(frame: DataFrame): ColumnTable {
   // The getter builds nothing, but is asked once: `column()` copies every row each time.
   const rows = frame.values as readonly (readonly unknown[])[];
   const { names, decisions } = notesOf(frame);
-  const columns = frame.columns.map((_, at) => numbersOr(rows.map((row) => row[at])));
+  const columns = frame.columns.map((_, at) => packed(rows.map((row) => row[at])));
   return { names: names ?? [...frame.columns], columns, ...(decisions && { decisions }) };
 }
 
 function columnsOfRows(rows: readonly unknown[]): ColumnTable {
-  const names = new Map<string, unknown[]>();
-  rows.forEach((row, i) => {
-    if (typeof row !== "object" || row === null || Array.isArray(row)) throw notARecord(rows, `row ${i + 1}`);
-    for (const name of Object.keys(row)) if (!names.has(name)) names.set(name, []);
-  });
-  for (const [name, column] of names) {
-    for (const row of rows)
-      column.push(Object.hasOwn(row as object, name) ? (row as Record<string, unknown>)[name] : null);
-  }
-  return { names: [...names.keys()], columns: [...names.values()].map(numbersOr) };
-}
-
-/** A column of numbers and empty cells becomes numbers with NaN where a cell is empty; others stay as they are. */
-function numbersOr(cells: readonly unknown[]): Column {
-  const values = new Float64Array(cells.length);
-  for (let i = 0; i < cells.length; i++) {
-    const cell = cells[i];
-    if (typeof cell === "number") values[i] = cell;
-    else if (cell === null || cell === undefined) values[i] = Number.NaN;
-    else return cells;
-  }
-  return values;
+  const bad = rows.findIndex((row) => typeof row !== "object" || row === null || Array.isArray(row));
+  if (bad >= 0) throw notARecord(rows, `row ${bad + 1}`);
+  return tableOfRows(rows as readonly object[]);
 }

@@ -21,3 +21,4 @@ export type {
   StepLength,
 } from "./observations.js";
 export { observations } from "./observe.js";
+export { packed, tableOfRows } from "./table-of-rows.js";

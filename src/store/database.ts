@@ -13,6 +13,29 @@ export async function withDatabase<T>(work: (connection: DuckDBConnection) => Pr
   }
 }
 
+/** Runs work on a connection of a database file, which is closed afterwards. */
+export async function withDatabaseFile<T>(
+  path: string,
+  access: "READ_ONLY" | "READ_WRITE",
+  work: (connection: DuckDBConnection) => Promise<T>,
+): Promise<T> {
+  const { DuckDBInstance } = await import("@duckdb/node-api");
+  const instance = await DuckDBInstance.create(path, { access_mode: access });
+  const connection = await instance.connect();
+  try {
+    return await work(connection);
+  } finally {
+    connection.closeSync();
+    instance.closeSync();
+  }
+}
+
+/** The first line of what the engine said, without the path that the analyst did not write. */
+export function reasonOf(cause: unknown, path: string): string {
+  const text = cause instanceof Error ? cause.message : String(cause);
+  return text.split("\n", 1)[0]!.replaceAll(path, "the file").replace(/\.$/, "");
+}
+
 /** A text as an SQL literal. */
 export function quoted(text: string): string {
   return `'${text.replaceAll("'", "''")}'`;

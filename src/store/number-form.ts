@@ -16,8 +16,9 @@ const groupedThenComma = /^\d{1,3}(?:[. '\u00a0\u202f\u2019]\d{3})+(?:,\d*)?$/;
 export function decimalSignOf(cell: string): DecimalSign | undefined {
   const bare = bareDigits(cell);
   // A leading zero means a code, a digit must be there, and no double keeps every sixteen-digit whole number.
-  if (bare === undefined || /^0\d/.test(bare) || !/\d/.test(bare) || /^\d{16,}$/.test(bare)) return undefined;
-  if (digits.test(bare)) return "none";
+  if (bare === undefined || /^0\d/.test(bare) || !/\d|^Infinity$/.test(bare) || /^\d{16,}$/.test(bare))
+    return undefined;
+  if (digits.test(bare) || bare === "Infinity") return "none";
   const asPoint = point.test(bare) || groupedThenPoint.test(bare);
   const asComma = comma.test(bare) || groupedThenComma.test(bare);
   if (asPoint && asComma) return settledBy(bare);
@@ -40,7 +41,7 @@ export function writtenNumber(cell: string, decimal: "." | ","): number | undefi
   const separators = decimal === "." ? /[, '\u00a0\u202f\u2019]/g : /[. '\u00a0\u202f\u2019]/g;
   const plain = bareDigits(cell)!.replace(separators, "").replace(",", ".");
   const size = Number(plain);
-  if (!Number.isFinite(size)) return undefined;
+  if (Number.isNaN(size)) return undefined;
   return isNegative(cell) ? -size : size;
 }
 

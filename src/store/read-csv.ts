@@ -1,5 +1,4 @@
 import { open, readFile } from "node:fs/promises";
-import type { Column } from "../record/index.js";
 import { columnNames } from "./column-names.js";
 import { type TextColumn, typedColumns } from "./csv-columns.js";
 import { delimiterOf } from "./csv-dialect.js";
@@ -9,13 +8,7 @@ import { decimalSignOf } from "./number-form.js";
 import type { ReadOptions } from "./read-options.js";
 import { readPlainCsv } from "./read-plain-csv.js";
 import { emptyFile, headerMissing, raggedRow, unendedQuote } from "./refusals.js";
-
-/** Columns of a file with what was found out about it. */
-export interface ReadColumns {
-  readonly names: readonly string[];
-  readonly columns: readonly Column[];
-  readonly found: readonly string[];
-}
+import type { FileColumns } from "./stored-table.js";
 
 const headBytes = 1 << 18;
 
@@ -23,7 +16,7 @@ const headBytes = 1 << 18;
  * Reads delimited text. A plain file (UTF-8, decimal points, no dates to put in order) is read by the database
  * engine; any other, and one that the engine refuses, is read here, where every cell can be looked at.
  */
-export async function readCsv(path: string, shownPath: string, options: ReadOptions): Promise<ReadColumns> {
+export async function readCsv(path: string, shownPath: string, options: ReadOptions): Promise<FileColumns> {
   const head = await headOf(path);
   const plain = options.encoding === undefined && options.skip === undefined && options.missing === undefined;
   if (plain && head.isWholeText) {
@@ -59,7 +52,7 @@ function skipLines(text: string, lines: number): string {
 }
 
 /** Reads delimited text cell by cell. */
-export function readText(text: string, path: string, options: ReadOptions): ReadColumns {
+export function readText(text: string, path: string, options: ReadOptions): FileColumns {
   const delimiter = options.delimiter ?? delimiterOf(wholeLines(text), path);
   const records = recordsOf(text, delimiter, path);
   if (records.length === 0) throw emptyFile(path);

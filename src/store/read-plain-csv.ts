@@ -4,8 +4,8 @@ import { csvRecords } from "./csv-records.js";
 import { cellsOf, numbersOf, quoted, withDatabase } from "./database.js";
 import { dateOrdersOf, plainDate } from "./date-form.js";
 import { decimalSignOf } from "./number-form.js";
-import type { ReadColumns } from "./read-csv.js";
 import type { ReadOptions } from "./read-options.js";
+import type { FileColumns } from "./stored-table.js";
 
 const looked = 5000;
 
@@ -20,7 +20,7 @@ export async function readPlainCsv(
   head: string,
   delimiter: string,
   options: ReadOptions,
-): Promise<ReadColumns | undefined> {
+): Promise<FileColumns | undefined> {
   const rows: (readonly string[])[] = [];
   for (const { cells } of csvRecords(head, delimiter)) if (rows.push(cells) > looked) break;
   const header = rows.shift();

@@ -1,24 +1,27 @@
 import { readdir, stat } from "node:fs/promises";
-import { basename, dirname, extname, resolve } from "node:path";
+import { basename, dirname, resolve } from "node:path";
 import { nearestNames } from "../numeric/index.js";
-import { type ReadColumns, readCsv } from "./read-csv.js";
+import { formatOfEnding } from "./format-of-ending.js";
+import { readCsv } from "./read-csv.js";
+import { readDuckdb } from "./read-duckdb.js";
+import { readExcel } from "./read-excel.js";
+import { readJson } from "./read-json.js";
 import type { Format, ReadOptions } from "./read-options.js";
+import { readParquet } from "./read-parquet.js";
 import { emptyFile, formatUnknown, noSuchFile, unreadableFile } from "./refusals.js";
 import { type FileScan, scanFile } from "./scan-file.js";
-import type { StoredTable } from "./stored-table.js";
+import { signatureOf } from "./signature.js";
+import type { FileColumns, StoredTable } from "./stored-table.js";
 
-const readers: Readonly<
-  Partial<Record<Format, (path: string, shown: string, options: ReadOptions) => Promise<ReadColumns>>>
-> = {
+type Reader = (path: string, shownPath: string, options: ReadOptions) => Promise<FileColumns>;
+
+const readers: Readonly<Record<Format, Reader>> = {
   csv: readCsv,
-  tsv: (path, shown, options) => readCsv(path, shown, { delimiter: "\t", ...options }),
-};
-
-const endings: Readonly<Record<string, Format>> = {
-  ".csv": "csv",
-  ".txt": "csv",
-  ".tsv": "tsv",
-  ".tab": "tsv",
+  tsv: (path, shownPath, options) => readCsv(path, shownPath, { delimiter: "\t", ...options }),
+  json: readJson,
+  parquet: readParquet,
+  excel: readExcel,
+  duckdb: readDuckdb,
 };
 
 /**
@@ -30,14 +33,16 @@ const endings: Readonly<Record<string, Format>> = {
  */
 export async function readTable(path: string, options: ReadOptions = {}): Promise<StoredTable> {
   const full = resolve(path);
-  const format = options.format ?? endings[extname(path).toLowerCase()];
   await refuseAbsent(full, path);
-  const reader = format === undefined ? undefined : readers[format];
-  if (format === undefined || reader === undefined) throw formatUnknown(path, Object.keys(readers));
-  const [scan, read]: [FileScan, ReadColumns] = await Promise.all([
-    scanFile(full),
-    reader(full, path, options),
-  ]);
+  const signature = await signatureOf(full);
+  const named = options.format ?? formatOfEnding(path);
+  const format = signature ?? named;
+  if (format === undefined) throw formatUnknown(path, Object.keys(readers));
+  if (signature === undefined && !isText(format))
+    throw unreadableFile(path, format, "its first bytes are of no such file");
+  const reading = readers[format](full, path, options);
+  const [scan, read]: [FileScan, FileColumns] = await Promise.all([scanFile(full), reading]);
+  const found = named === format ? [] : [`The file is ${format} by its contents, whatever its name says.`];
   const rows = read.columns[0]?.length ?? 0;
   if (rows === 0) throw emptyFile(path);
   const source = Object.freeze({
@@ -46,9 +51,13 @@ export async function readTable(path: string, options: ReadOptions = {}): Promis
     checksum: scan.checksum,
     bytes: scan.bytes,
     rows,
-    found: Object.freeze([...read.found]),
+    found: Object.freeze([...found, ...read.found]),
   });
   return Object.freeze({ names: read.names, columns: read.columns, source });
+}
+
+function isText(format: Format): boolean {
+  return format === "csv" || format === "tsv" || format === "json";
 }
 
 async function refuseAbsent(full: string, path: string): Promise<void> {

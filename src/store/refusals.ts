@@ -128,3 +128,39 @@ export function mixedDates(row: number, column: string, cell: string, order: str
     { row, column, value: cell, order },
   );
 }
+
+const listed = (names: readonly string[]): string =>
+  names
+    .slice(0, 12)
+    .map((name) => `"${name}"`)
+    .join(", ");
+
+export function tableUnclear(path: string, names: readonly string[]): ModelError {
+  const held = names.length === 0 ? "no tables" : `several tables: ${listed(names)}`;
+  return new ModelError(
+    "table-unclear",
+    `"${path}" holds ${held}. Say which one to read, for example table: ${JSON.stringify(names[0] ?? "record")}.`,
+    { path, names },
+  );
+}
+
+export function noSuchTable(path: string, table: string, names: readonly string[]): ModelError {
+  return new ModelError(
+    "no-such-table",
+    `"${path}" holds no table "${table}". It holds ${names.length === 0 ? "none" : listed(names)}.`,
+    { path, table, names },
+  );
+}
+
+export function formulaWithoutValue(path: string, row: number, column: string, formula: string): ModelError {
+  return new ModelError(
+    "formula-without-value",
+    `Row ${row}, ${column} of "${path}" holds the formula ${shown(formula)} without a value. ` +
+      "Open the workbook, let it compute, and save it; formulas are not computed here.",
+    { path, row, column, formula },
+  );
+}
+
+export function notWritable(path: string, reason: string, remedy: string): ModelError {
+  return new ModelError("not-writable", `"${path}" was not written: ${reason}. ${remedy}`, { path, reason });
+}

@@ -1,4 +1,4 @@
-import type { ColumnTable } from "../record/index.js";
+import type { Column, ColumnTable } from "../record/index.js";
 
 /** Where a record came from, so that a colleague can tell whether the same file is read again. */
 export interface RecordSource {
@@ -16,4 +16,11 @@ export interface RecordSource {
 /** A record as it was read, with its source. */
 export interface StoredTable extends ColumnTable {
   readonly source: RecordSource;
+}
+
+/** Columns of a file with what was found out about it. */
+export interface FileColumns {
+  readonly names: readonly string[];
+  readonly columns: readonly Column[];
+  readonly found: readonly string[];
 }
