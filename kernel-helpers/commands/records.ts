@@ -7,8 +7,16 @@ import {
   type Observations,
   observations as observe,
 } from "../../src/record/index.js";
-import { type ReadOptions, readTable } from "../../src/store/index.js";
-import { columnsOf, noteFrame, notesOf, type RecordLike, toFrame } from "../dataframe/index.js";
+import { type ReadOptions, readTable, type WriteOptions, writeTables } from "../../src/store/index.js";
+import {
+  columnsOf,
+  noteFrame,
+  notesOf,
+  type RecordLike,
+  type Result,
+  tablesOf,
+  toFrame,
+} from "../dataframe/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { differencesBundle } from "./show-differences.js";
@@ -32,6 +40,26 @@ export async function readRecord(path: string, options: ReadOptions = {}): Promi
   noteFrame(frame, { ...notesOf(frame), source: table.source });
   caseLog.noteRecord({ path, rows: table.source.rows, checksum: table.source.checksum });
   return frame;
+}
+
+/**
+ * Writes a record, or the tables of any result, to a file: CSV, TSV, Excel, Parquet, JSON or a DuckDB file, by
+ * the ending of its name. A workbook takes every table of a result, a sheet each.
+ *
+ * Every double comes back the same; a missing cell is left empty; a text is quoted where it must be. The file is
+ * written whole or not at all.
+ *
+ * @throws {ModelError} `format-unknown` | `not-writable` | `not-a-record`.
+ * @example await writeRecord(fit(rule, counts, { errors: "process" }), "crowding.xlsx");
+ */
+export async function writeRecord(
+  record: RecordLike | Result,
+  path: string,
+  options: WriteOptions = {},
+): Promise<void> {
+  const tables = tablesOf(record);
+  const named = tables.length === 1 ? [{ ...tables[0]!, name: options.table ?? "record" }] : tables;
+  await writeTables(named, path, options);
 }
 
 /**
