@@ -1,0 +1,66 @@
+import type { DataFrame } from "danfojs-node";
+import { estimates, type Fit, points, summary } from "../../src/estimate/index.js";
+import type { Differences, Observations } from "../../src/record/index.js";
+import { tableOfRows } from "../../src/record/index.js";
+import type { NamedTable } from "../../src/store/index.js";
+import { columnsOf, type RecordLike } from "./columns-of.js";
+import { isFrame } from "./danfo.js";
+import { observedTable } from "./observed-table.js";
+import { resultTables } from "./result-tables.js";
+import { toFrame } from "./to-frame.js";
+
+/** Any result of this package: a plain object with a kind. */
+export interface Result {
+  readonly kind: string;
+}
+
+/** The tables of a fit. */
+export interface FitFrames {
+  /** A row a constant. */
+  readonly estimates: DataFrame;
+  /** A row a period. */
+  readonly points: DataFrame;
+  /** A row a series. */
+  readonly summary: DataFrame;
+}
+
+/**
+ * Turns anything into DataFrames: a record or observations or differences into one, a fit into its three views,
+ * any other result into one a list that it holds, by name.
+ *
+ * @example frame(fit(rule, counts, { errors: "process" })).estimates
+ */
+export function frame(record: RecordLike | Observations | Differences): DataFrame;
+export function frame(fit: Fit): FitFrames;
+export function frame(result: Result): Readonly<Record<string, DataFrame>>;
+export function frame(
+  value: RecordLike | Result,
+): DataFrame | FitFrames | Readonly<Record<string, DataFrame>> {
+  if (isFrame(value)) return value;
+  const tables = tablesOf(value);
+  const [only] = tables;
+  if (only !== undefined && tables.length === 1 && only.name === "record") return toFrame(only.table);
+  return Object.freeze(Object.fromEntries(tables.map(({ name, table }) => [name, toFrame(table)])));
+}
+
+/** The tables of a record or result; a single one named "record" where there is but one. */
+export function tablesOf(value: RecordLike | Result): readonly NamedTable[] {
+  switch ((value as Partial<Result>).kind) {
+    case "observations":
+      return [{ name: "record", table: observedTable(value as Observations) }];
+    case "differences":
+      return resultTables({ series: (value as Differences).series }).map(({ table }) => ({
+        name: "record",
+        table,
+      }));
+    case "fit":
+      return tablesOfFit(value as Fit);
+  }
+  if (!isFrame(value) && typeof (value as Partial<Result>).kind === "string") return resultTables(value);
+  return [{ name: "record", table: columnsOf(value as RecordLike) }];
+}
+
+function tablesOfFit(fit: Fit): readonly NamedTable[] {
+  const rows = resultTables({ estimates: estimates(fit), points: points(fit) });
+  return [...rows, { name: "summary", table: tableOfRows(summary(fit)) }];
+}

@@ -1,0 +1,88 @@
+import { tableOfRows } from "../../src/record/index.js";
+import type { NamedTable } from "../../src/store/index.js";
+
+type Plain = Readonly<Record<string, unknown>>;
+
+/** Columns that a part of a result takes over from what it is part of. */
+interface Inherited {
+  readonly scalars: Plain;
+  readonly series: Readonly<Record<string, ArrayLike<unknown>>>;
+}
+
+/** Parts of a result that are results themselves and have tables of their own. */
+const apart = new Set(["observations", "rule", "fit", "forecast"]);
+
+/**
+ * The tables of any result: its single values as "summary", and every list in it as a table of the list's name,
+ * a row an item (or a row a place, where an item holds series), with the values of what it is part of beside it.
+ */
+export function resultTables(result: object): readonly NamedTable[] {
+  const rows = new Map<string, object[]>();
+  gather(result as Plain, "summary", { scalars: {}, series: {} }, rows);
+  return Array.from(rows, ([name, own]) => ({ name, table: tableOfRows(own) }));
+}
+
+function gather(part: Plain, name: string, inherited: Inherited, rows: Map<string, object[]>): void {
+  const scalars = { ...inherited.scalars, ...scalarsOf(part, "") };
+  const own = seriesOf(part);
+  const length = Math.max(0, ...Object.values(own).map((series) => series.length));
+  const series = ofLength({ ...inherited.series, ...own }, length);
+  const list = rows.get(name) ?? [];
+  if (length > 0) for (let i = 0; i < length; i++) list.push({ ...scalars, ...at(series, i) });
+  else if (Object.keys(scalars).length > Object.keys(inherited.scalars).length) list.push(scalars);
+  if (list.length > 0) rows.set(name, list);
+  for (const [child, items] of Object.entries(part)) {
+    if (isListOfParts(items)) for (const item of items) gather(item, child, { scalars, series }, rows);
+    else if (isListOfTexts(items))
+      rows.set(child, [...(rows.get(child) ?? []), ...items.map((text) => ({ ...scalars, [child]: text }))]);
+  }
+}
+
+function isScalar(value: unknown): boolean {
+  return ["number", "string", "boolean", "bigint"].includes(typeof value) || value === null;
+}
+
+function isPart(value: unknown): value is Plain {
+  if (typeof value !== "object" || value === null || Array.isArray(value) || ArrayBuffer.isView(value))
+    return false;
+  return !apart.has(String((value as Plain)["kind"]));
+}
+
+function isListOfParts(value: unknown): value is readonly Plain[] {
+  return Array.isArray(value) && value.length > 0 && value.every(isPart);
+}
+
+function isListOfTexts(value: unknown): value is readonly string[] {
+  return Array.isArray(value) && value.length > 0 && value.every((item) => typeof item === "string");
+}
+
+/** Single values, those of a nested part under "part.name". */
+function scalarsOf(part: Plain, prefix: string): Plain {
+  const own: Record<string, unknown> = {};
+  for (const [name, value] of Object.entries(part)) {
+    if (isScalar(value) && (name !== "kind" || prefix !== ""))
+      own[`${prefix}${name}`] = typeof value === "bigint" ? String(value) : value;
+    else if (isPart(value) && prefix === "") Object.assign(own, scalarsOf(value, `${name}.`));
+  }
+  return own;
+}
+
+function seriesOf(part: Plain): Record<string, ArrayLike<unknown>> {
+  const isSeries = (value: unknown): value is ArrayLike<unknown> =>
+    (ArrayBuffer.isView(value) && !(value instanceof DataView)) ||
+    (Array.isArray(value) && value.length > 0 && value.every((item) => typeof item === "number"));
+  return Object.fromEntries(
+    Object.entries(part).filter((entry): entry is [string, ArrayLike<unknown>] => isSeries(entry[1])),
+  );
+}
+
+function ofLength(
+  series: Readonly<Record<string, ArrayLike<unknown>>>,
+  length: number,
+): Record<string, ArrayLike<unknown>> {
+  return Object.fromEntries(Object.entries(series).filter(([, values]) => values.length === length));
+}
+
+function at(series: Readonly<Record<string, ArrayLike<unknown>>>, i: number): Plain {
+  return Object.fromEntries(Object.entries(series).map(([name, values]) => [name, values[i]]));
+}
