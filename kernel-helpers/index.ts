@@ -9,12 +9,13 @@ export {
   points,
   summary,
 } from "../src/estimate/index.js";
-export type { Comparison } from "../src/evidence/index.js";
+export type { Check, CheckOptions, Comparison } from "../src/evidence/index.js";
 export { leastSquares, ModelError } from "../src/numeric/index.js";
 export type { Forecast, ForecastOptions } from "../src/projection/index.js";
 export type { Finding, Observations } from "../src/record/index.js";
 export { answer, type CaseOptions, closeCase, openCase } from "./commands/case.js";
 export type { Domain } from "./commands/cautions.js";
+export { check } from "./commands/checks.js";
 export { compare } from "./commands/comparisons.js";
 export { reaches } from "./commands/decisions.js";
 export { type Explanation, explain } from "./commands/explain.js";

@@ -23,3 +23,11 @@ export function refuseUnlikeErrors(): ModelError {
       "their likelihoods cannot be set side by side. Fit every rival with the same { errors }.",
   );
 }
+
+export function refuseFewRefits(given: number, least: number): ModelError {
+  return new ModelError(
+    "refits-too-few",
+    `Recovery needs at least ${least} refits to tell a share of intervals; ${given} given. Leave { refits } out for 200.`,
+    { given, least },
+  );
+}

@@ -1,0 +1,93 @@
+import type { Fit, GroupFit } from "../../estimate/index.js";
+import { type RandomStream, randomStream } from "../../numeric/index.js";
+import { refuseFewRefits } from "../refusals.js";
+import { type ErrorAdvice, errorAdvice } from "./error-advice.js";
+import { type LackOfFit, lackOfFit } from "./lack-of-fit.js";
+import { type Recovery, recovery } from "./recovery.js";
+import { type ResidualTest, residualTests } from "./residual-tests.js";
+import { concernsOf, verdictOf } from "./verdict.js";
+import { type Window, windows } from "./windows.js";
+
+/** Options of `check`. */
+export interface CheckOptions {
+  /** Records drawn from the fit and refitted; default 200, the least before an interval is quoted. */
+  readonly refits?: number;
+  /** Default 1. */
+  readonly seed?: number;
+}
+
+/** The checks of one group. */
+export interface GroupCheck {
+  readonly group: string;
+  readonly tests: readonly ResidualTest[];
+  readonly windows: readonly Window[];
+  readonly lackOfFit: readonly LackOfFit[];
+  readonly recovery: Recovery;
+  /** Undefined where the other kind of error could not be fitted. */
+  readonly errors: ErrorAdvice | undefined;
+  /** What speaks against the fit, as whole sentences; empty where nothing does. */
+  readonly concerns: readonly string[];
+  readonly sentence: string;
+}
+
+/** A fit looked at from all sides. */
+export interface Check {
+  readonly kind: "check";
+  readonly fit: Fit;
+  readonly options: Required<CheckOptions>;
+  readonly groups: readonly GroupCheck[];
+  readonly sentence: string;
+}
+
+/** Fewer refits tell coverage too roughly to be read. */
+const leastRefits = 50;
+/** Records drawn with each kind of error, for the advice. */
+const adviceDraws = 60;
+
+/**
+ * Looks for what speaks against a fit: tests of its residuals, how much its ends and its window decide, its misfit
+ * against replicates, whether refits of records drawn from it find its constants again (bias, and the share of
+ * intervals that hold the truth), and whether the scatter lies in the reading or in the change.
+ *
+ * @returns per group the single checks, and what they come to in words.
+ * @throws {ModelError} `refits-too-few`.
+ * @example check(fit(crowding, counts, { errors: "observation" })).sentence;
+ */
+export function check(fit: Fit, options: CheckOptions = {}): Check {
+  const settings = { refits: options.refits ?? 200, seed: options.seed ?? 1 };
+  if (!Number.isInteger(settings.refits) || settings.refits < leastRefits)
+    throw refuseFewRefits(settings.refits, leastRefits);
+  let stream = randomStream(settings.seed);
+  const groups = fit.groups.map((group) => {
+    const own = stream;
+    stream = stream.jump();
+    return groupCheck(fit, group, settings, own);
+  });
+  const named = (group: GroupCheck): string => (group.group === "" ? "" : `${group.group}: `);
+  const sentence = groups.map((group) => `${named(group)}${group.sentence}`).join(" ");
+  return Object.freeze({
+    kind: "check",
+    fit,
+    options: Object.freeze(settings),
+    groups: Object.freeze(groups),
+    sentence,
+  });
+}
+
+function groupCheck(
+  fit: Fit,
+  group: GroupFit,
+  { refits }: Required<CheckOptions>,
+  stream: RandomStream,
+): GroupCheck {
+  const found = {
+    group: group.group,
+    tests: residualTests(fit, group),
+    windows: windows(fit, group),
+    lackOfFit: lackOfFit(fit, group),
+    recovery: recovery(fit, group, refits, stream),
+    errors: errorAdvice(fit, group, adviceDraws, stream),
+  };
+  const concerns = concernsOf(fit, group, found);
+  return Object.freeze({ ...found, concerns, sentence: verdictOf(group, found, concerns) });
+}

@@ -1,0 +1,177 @@
+import { type Fit, fit as fitRule, type GroupFit } from "../../estimate/index.js";
+import { ModelError, type RandomStream } from "../../numeric/index.js";
+import { type CompiledRule, compileRule } from "../../rule/index.js";
+import { recordDrawer } from "../refit/record-drawer.js";
+import { type Refitter, refitProblem, refitter } from "../refit/refitter.js";
+import { autocorrelations } from "../statistics/autocorrelation.js";
+import { residualSeries } from "./residual-series.js";
+
+/** A kind of error that stands alone. */
+type Single = "process" | "observation";
+
+/** Where the scatter of a record seems to lie, and what speaks for it. */
+export interface ErrorAdvice {
+  readonly kind: Single | "undecided";
+  /** Log-likelihood with errors in the observation less that with errors in the process, of the values after the first. */
+  readonly difference: number;
+  /** Mean and standard deviation of that difference in records drawn with errors of each kind. */
+  readonly expected: Readonly<Record<Single, { readonly mean: number; readonly deviation: number }>>;
+  /** Weight of "observation" against "process", 0 to 1. */
+  readonly weight: number;
+  /** Correlation of neighbouring residuals of each fit. */
+  readonly lagOne: Readonly<Record<Single, number>>;
+  readonly sentence: string;
+}
+
+/** Weight from which one kind is advised. */
+const decided = 0.8;
+/** Deviations from both expectations beyond which neither kind alone fits. */
+const strange = 3;
+
+/**
+ * Which kind of error a record speaks for: the rule is fitted with each, and the difference of the two
+ * log-likelihoods is held against what it comes to in records drawn from each fit.
+ *
+ * The bare difference favours the observation, whose path can bend after the fact; drawing records from both fits
+ * takes that out (the test of separate families by simulation).
+ *
+ * @param draws - records drawn with each kind.
+ * @returns undefined where one of the two fits cannot be had.
+ * @see Cox, D. R. (1962), Further results on tests of separate families of hypotheses, Journal of the Royal
+ *   Statistical Society B 24; Williams, D. A. (1970), Discrimination between regression models, Biometrics 26.
+ */
+export function errorAdvice(
+  fit: Fit,
+  group: GroupFit,
+  draws: number,
+  stream: RandomStream,
+): ErrorAdvice | undefined {
+  const process = sideOf(fit, group, "process");
+  const observation = sideOf(fit, group, "observation");
+  if (process === undefined || observation === undefined) return undefined;
+  const measure = differenceOf(process, observation);
+  const difference = measure(process.again.compared.values);
+  const expected = {
+    process: expectedOf(process, measure, draws, stream),
+    observation: expectedOf(observation, measure, draws, stream),
+  };
+  const weight =
+    1 /
+    (1 + Math.exp(logDensity(difference, expected.process) - logDensity(difference, expected.observation)));
+  const away = (kind: Single): number =>
+    Math.abs(difference - expected[kind].mean) / expected[kind].deviation;
+  const neither = Math.min(away("process"), away("observation")) > strange;
+  const kind = neither || Number.isNaN(weight) ? "undecided" : kindOf(weight);
+  const lagOne = { process: lagOneOf(process), observation: lagOneOf(observation) };
+  const advice = { kind, difference, expected, weight, lagOne } as const;
+  return { ...advice, sentence: sentenceOf(advice, neither, group.count) };
+}
+
+interface Side {
+  readonly fit: Fit;
+  readonly group: GroupFit;
+  readonly compiled: CompiledRule;
+  readonly again: Refitter;
+  readonly at: Float64Array;
+}
+
+/** The fit of one kind, taken over where it is the one given. */
+function sideOf(given: Fit, group: GroupFit, errors: Single): Side | undefined {
+  const fit = given.options.errors === errors ? given : otherFit(given, group, errors);
+  const own = fit?.groups.find((each) => each.group === group.group);
+  if (fit === undefined || own === undefined || !(own.sigma > 0)) return undefined;
+  const compiled = compileRule(fit.rule);
+  return {
+    fit,
+    group: own,
+    compiled,
+    again: refitter(refitProblem(fit, own), compiled),
+    at: Float64Array.from(own.estimates, (estimate) => estimate.value),
+  };
+}
+
+function otherFit(given: Fit, group: GroupFit, errors: Single): Fit | undefined {
+  const groups = given.observations.groups.filter((each) => each.name === group.group);
+  try {
+    return fitRule(given.rule, { ...given.observations, groups }, { ...given.options, errors });
+  } catch (cause) {
+    // Too few pairs for the other kind, for instance: then there is nothing to compare.
+    if ((cause as Error).name === ModelError.name) return undefined;
+    throw cause;
+  }
+}
+
+/** The difference of log-likelihoods of the values after the first, for a record [rows, states]. */
+function differenceOf(process: Side, observation: Side): (values: Float64Array) => number {
+  const { compared } = observation.again;
+  const first = compared.row.findIndex((row) => row > 0);
+  const fitted = new Float64Array(compared.count);
+  const states = observation.fit.rule.states.length;
+  const log = observation.fit.options.spread === "proportional";
+  return (values) => {
+    process.again.use(values);
+    observation.again.use(values);
+    const steps = process.again.minimise(process.at);
+    const path = observation.again.minimise(observation.at);
+    observation.again.fitted(path.estimates, fitted);
+    let sum = path.sumOfSquares;
+    for (let i = 0; i < first; i++) {
+      const value = values[compared.row[i]! * states + compared.state[i]!]!;
+      const residual = log ? Math.log(value / fitted[i]!) : value - fitted[i]!;
+      sum -= residual * residual;
+    }
+    const count = process.again.compared.count;
+    return (-count / 2) * Math.log(sum / steps.sumOfSquares);
+  };
+}
+
+function expectedOf(
+  side: Side,
+  measure: (values: Float64Array) => number,
+  draws: number,
+  stream: RandomStream,
+): { readonly mean: number; readonly deviation: number } {
+  const draw = recordDrawer(
+    refitProblem(side.fit, side.group),
+    side.compiled,
+    side.again.compared,
+    side.group.sigma,
+  );
+  const values = new Float64Array(side.again.compared.values.length);
+  const found: number[] = [];
+  for (let tries = 0; found.length < draws && tries < 2 * draws; tries++) {
+    const difference = draw(stream, values) ? measure(values) : Number.NaN;
+    if (Number.isFinite(difference)) found.push(difference);
+  }
+  const mean = found.reduce((sum, value) => sum + value, 0) / found.length;
+  const squares = found.reduce((sum, value) => sum + (value - mean) ** 2, 0);
+  return { mean, deviation: Math.sqrt(squares / (found.length - 1)) };
+}
+
+function logDensity(value: number, { mean, deviation }: { mean: number; deviation: number }): number {
+  return -Math.log(deviation) - 0.5 * ((value - mean) / deviation) ** 2;
+}
+
+function kindOf(weight: number): ErrorAdvice["kind"] {
+  if (weight >= decided) return "observation";
+  return weight <= 1 - decided ? "process" : "undecided";
+}
+
+function lagOneOf({ fit, group }: Side): number {
+  return autocorrelations(residualSeries(group, fit.rule.states[0]!), 1)[0]!;
+}
+
+function sentenceOf(advice: Omit<ErrorAdvice, "sentence">, neither: boolean, count: number): string {
+  const { lagOne, weight } = advice;
+  const limit = (1.96 / Math.sqrt(count)).toFixed(2);
+  const evidence =
+    `neighbouring residuals correlate ${lagOne.process.toFixed(2)} step by step and ${lagOne.observation.toFixed(2)} ` +
+    `along the whole path, by chance within ±${limit}`;
+  if (neither)
+    return `The scatter fits neither errors in the reading alone nor errors in the change alone (${evidence}): both, or a wrong rule.`;
+  const percent = Math.round(100 * Math.max(weight, 1 - weight));
+  if (advice.kind === "undecided")
+    return `The record does not tell whether the scatter lies in the reading or in the change itself (${evidence}). Carry both forward.`;
+  const place = advice.kind === "observation" ? "in the reading" : "in the change itself";
+  return `The scatter lies ${place} (weight ${percent}%; ${evidence}): use { errors: "${advice.kind}" }.`;
+}

@@ -1,0 +1,67 @@
+import type { Fit, GroupFit } from "../../estimate/index.js";
+import { type Refitter, refitProblem, refitter } from "../refit/refitter.js";
+
+/** The estimates from part of the record. */
+export interface Window {
+  readonly name: string;
+  /** First and last time used, in the period column's unit. */
+  readonly from: number;
+  readonly to: number;
+  readonly count: number;
+  readonly estimates: readonly {
+    readonly name: string;
+    readonly value: number;
+    /** Away from the estimate of the whole record, in its standard errors; undefined where it has none. */
+    readonly shift: number | undefined;
+  }[];
+}
+
+/** Shares of the record left out, at its beginning and its end. */
+const shares = [0.2, 0.4];
+
+/**
+ * Refits to parts of the record: without its first row, without its last, without the first and last fifth and two
+ * fifths. A part with fewer values than unknowns + 3 is passed over.
+ */
+export function windows(fit: Fit, group: GroupFit): readonly Window[] {
+  const again = refitter(refitProblem(fit, group));
+  const { time } = fit.observations.groups.find((each) => each.name === group.group)!;
+  const last = time.length - 1;
+  const cut = (share: number): number => Math.round(share * time.length);
+  const parts: readonly (readonly [string, number, number])[] = [
+    ["without the first row", 1, last],
+    ["without the last row", 0, last - 1],
+    ...shares.map((share) => [`without the first ${100 * share}%`, cut(share), last] as const),
+    ...shares.map((share) => [`without the last ${100 * share}%`, 0, last - cut(share)] as const),
+  ];
+  const seen = new Set<string>();
+  return parts.flatMap(([name, from, to]) => {
+    if (seen.has(`${from} ${to}`)) return [];
+    seen.add(`${from} ${to}`);
+    const count = keepRows(again, from, to, fit.options.errors === "process");
+    const { names } = again;
+    if (count < names.length + 3) return [];
+    const start = Float64Array.from(group.estimates, (estimate) => estimate.value);
+    const found = again.minimise(start);
+    if (found.stop.kind === "failed") return [];
+    const estimates = group.estimates.map((estimate, i) => {
+      const value = found.estimates[i]!;
+      const { standardError } = estimate;
+      const shift = standardError === undefined ? undefined : (value - estimate.value) / standardError;
+      return { name: estimate.name, value, shift };
+    });
+    return [{ name, from: time[from]!, to: time[to]!, count, estimates }];
+  });
+}
+
+/** Counts only values of rows `from` to `to`, and steps within them; tells how many. */
+function keepRows({ compared, counts }: Refitter, from: number, to: number, steps: boolean): number {
+  const first = steps ? from + 1 : from;
+  let kept = 0;
+  for (let i = 0; i < counts.length; i++) {
+    const inside = compared.row[i]! >= first && compared.row[i]! <= to;
+    counts[i] = inside ? 1 : 0;
+    if (inside) kept++;
+  }
+  return kept;
+}
