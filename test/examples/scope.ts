@@ -1,0 +1,48 @@
+import {
+  fit,
+  forecast,
+  observations,
+  openCase,
+  reaches,
+  readRecord,
+  recurrence,
+} from "../../kernel-helpers/index.js";
+import { yeast } from "../published/carlson-yeast.js";
+
+let made: Promise<Readonly<Record<string, unknown>>> | undefined;
+
+/** Values that examples speak of without making them. */
+export function scope(): Promise<Readonly<Record<string, unknown>>> {
+  made ??= make();
+  return made;
+}
+
+async function make(): Promise<Readonly<Record<string, unknown>>> {
+  process.chdir(`${import.meta.dirname}/../../notebooks`);
+  openCase({ title: "Examples", question: "Do they run?", domain: "cultures", seed: 7 });
+  const readings = await readRecord("data/algae-line-3.csv");
+  readings.addColumn("density", readings["reading"].sub(readings["blank"]), { inplace: true });
+  const counts = observations(
+    { hour: [...yeast.keys()], density: [...yeast] },
+    { period: "hour", step: { every: 1, of: "hour" }, value: "density" },
+  );
+  const crowding = recurrence("ΔN = r*N*(1 - N/K)");
+  const sheltered = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)");
+  const crowdingFit = fit(crowding, counts, { errors: "observation" });
+  const shelteredFit = fit(sheltered, counts, { errors: "observation" });
+  const fitted = shelteredFit;
+  const ahead = forecast(fitted, { periods: 12 });
+  const ready = reaches(ahead, { value: 600, direction: "rising" });
+  return {
+    readings,
+    counts,
+    crowding,
+    sheltered,
+    rule: sheltered,
+    crowdingFit,
+    shelteredFit,
+    fitted,
+    ahead,
+    ready,
+  };
+}
