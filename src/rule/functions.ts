@@ -34,6 +34,7 @@ export const ruleFunctions: readonly RuleFunction[] = Object.freeze([
   entry("sin", 1, 1, "sin(x)", "sine of x in radians"),
   entry("cos", 1, 1, "cos(x)", "cosine of x in radians"),
   entry("tan", 1, 1, "tan(x)", "tangent of x in radians"),
+  entry("asin", 1, 1, "asin(x)", "angle in radians whose sine is x"),
   entry("if", 3, 3, "if(condition, a, b)", "a where the condition holds, otherwise b"),
   entry("change", 1, 1, "change(X) = ...", "the change of state X from this period to the next"),
 ]);

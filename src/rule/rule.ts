@@ -1,4 +1,5 @@
 import type { Warning } from "../numeric/index.js";
+import type { NamedRule } from "./catalogue/named-rule.js";
 
 /** Random change added in every period: on the value itself, or as a factor exp(sd z - sd^2/2) of mean 1. */
 export interface ProcessNoise {
@@ -41,4 +42,6 @@ export interface Rule {
   /** By state, where stated. */
   readonly noise: Readonly<Record<string, ProcessNoise>>;
   readonly findings: readonly Warning[];
+  /** What the catalogue knows of the rule, if it is from there. */
+  readonly named?: NamedRule;
 }

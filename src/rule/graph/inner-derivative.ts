@@ -60,6 +60,11 @@ const derivatives: Readonly<Record<Operator, Derivative>> = {
   sin: (use, node, a) => use.multiply(use.graph.apply("cos", node.inside[0]!), a),
   cos: (use, node, a) => use.negate(use.multiply(use.graph.apply("sin", node.inside[0]!), a)),
   tan: (use, node, a) => use.multiply(use.add(use.graph.number(1), use.multiply(node, node)), a),
+  asin: (use, node, a) => {
+    const square = use.multiply(node.inside[0]!, node.inside[0]!);
+    const root = use.graph.apply("sqrt", use.subtract(use.graph.number(1), square));
+    return use.multiply(a, use.reciprocal(root));
+  },
 };
 
 /** Derivative of an inner node, given those of its arguments. */

@@ -111,4 +111,6 @@ export const intervalOperations: Readonly<Record<Operator, IntervalOperation>> =
   sin: wave(Math.sin, Math.PI / 2),
   cos: wave(Math.cos, 0),
   tan,
+  asin: ([low, high]) =>
+    low > 1 || high < -1 ? nowhere : rising(Math.asin, [Math.max(low, -1), Math.min(high, 1)]),
 };

@@ -27,7 +27,8 @@ export type Operator =
   | "mod"
   | "sin"
   | "cos"
-  | "tan";
+  | "tan"
+  | "asin";
 
 /** Where a leaf's value comes from. `slot` counts within the role; inputs also have an offset in periods. */
 export type LeafRole = "state" | "constant" | "input" | "period";

@@ -64,4 +64,5 @@ export const operations: Readonly<Record<Operator, Operation>> = {
   sin: { value: Math.sin, code: call("sin") },
   cos: { value: Math.cos, code: call("cos") },
   tan: { value: Math.tan, code: call("tan") },
+  asin: { value: Math.asin, code: call("asin") },
 };

@@ -58,6 +58,7 @@ const functionNames: Readonly<Record<string, string>> = {
   sin: "\\sin",
   cos: "\\cos",
   tan: "\\tan",
+  asin: "\\arcsin",
   sign: "\\operatorname{sgn}",
 };
 

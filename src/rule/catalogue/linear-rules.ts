@@ -1,0 +1,100 @@
+import type { Rule } from "../rule.js";
+import { type NamedRuleOptions, named } from "./named.js";
+import type { CatalogueEntry } from "./named-rule.js";
+import { growth, inLevels, level, positive, pure } from "./quantities.js";
+
+const constantChange: CatalogueEntry = {
+  name: "constantChange",
+  title: "Constant change",
+  text: "x[t+1] = x + c",
+  source: "common practice, no source",
+  quantities: { x: level, c: inLevels("change a period") },
+  holds: [],
+  equilibria: [],
+  closedForms: [{ values: { x: "x0 + c*t" } }],
+  remarks: "It stays nowhere unless c = 0, and then everywhere.",
+};
+
+const geometric: CatalogueEntry = {
+  name: "geometric",
+  title: "Geometric growth or decline",
+  text: "x[t+1] = R*x",
+  source: "Malthus (1798), An Essay on the Principle of Population",
+  quantities: { x: level, R: growth },
+  holds: ["R > 0"],
+  bounds: { R: positive },
+  guesses: { R: 1.1 },
+  equilibria: [{ at: { x: "0" }, multiplier: "R" }],
+  closedForms: [{ values: { x: "x0*R^t" } }],
+  remarks: "Zero is stable if and only if R < 1. It doubles every log(2)/log(R) periods.",
+};
+
+const affine: CatalogueEntry = {
+  name: "affine",
+  title: "Affine change: deposit, loan, dosing, mixing",
+  text: "x[t+1] = a*x + b",
+  source: "common practice, no source",
+  quantities: {
+    x: level,
+    a: pure("share kept, or one plus the interest of a period"),
+    b: inLevels("amount added a period"),
+  },
+  holds: [],
+  guesses: { a: 1 },
+  equilibria: [{ at: { x: "b/(1 - a)" }, multiplier: "a", when: "a != 1" }],
+  closedForms: [
+    { when: "a != 1", values: { x: "a^t*x0 + b*(1 - a^t)/(1 - a)" } },
+    { when: "a == 1", values: { x: "x0 + b*t" } },
+  ],
+  remarks:
+    "Stable if and only if abs(a) < 1. For a loan a = 1 + i and b = -p: the level p/i is unstable, and above it the debt grows without end.",
+};
+
+const dosing: CatalogueEntry = {
+  name: "dosing",
+  title: "Repeated dosing, level right after each dose",
+  text: "M[t+1] = rho*M + D",
+  source: "common practice, no source",
+  quantities: {
+    M: level,
+    rho: pure("share left after one interval, 2^(-interval/half-life)"),
+    D: inLevels("dose"),
+  },
+  holds: ["rho > 0 and rho < 1"],
+  bounds: { rho: [0, 1], D: positive },
+  guesses: { rho: 0.5 },
+  equilibria: [{ at: { M: "D/(1 - rho)" }, multiplier: "rho" }],
+  closedForms: [{ values: { M: "rho^t*M0 + D*(1 - rho^t)/(1 - rho)" } }],
+  remarks:
+    "Peak D/(1 - rho), trough rho*D/(1 - rho), accumulation ratio 1/(1 - rho). A linear teaching case only: not for dosing decisions.",
+};
+
+const driven: CatalogueEntry = {
+  name: "driven",
+  title: "Affine change with a recorded driver",
+  text: "x[t+1] = a*x + b + c*u",
+  source: "common practice, no source",
+  inputs: ["u"],
+  quantities: {
+    x: level,
+    a: pure("share kept"),
+    b: inLevels("amount added a period"),
+    c: inLevels("effect of one unit of the driver"),
+    u: pure("driver of the period"),
+  },
+  holds: [],
+  equilibria: [{ at: { x: "(b + c*u)/(1 - a)" }, multiplier: "a", when: "a != 1" }],
+  closedForms: [],
+  remarks: "A projection needs the driver's future values: give them as scenarios.",
+};
+
+/** x' = x + c. */
+export const constantChangeRule = (options?: NamedRuleOptions): Rule => named(constantChange, options);
+/** x' = R x. */
+export const geometricRule = (options?: NamedRuleOptions): Rule => named(geometric, options);
+/** x' = a x + b. */
+export const affineRule = (options?: NamedRuleOptions): Rule => named(affine, options);
+/** M' = rho M + D. */
+export const dosingRule = (options?: NamedRuleOptions): Rule => named(dosing, options);
+/** x' = a x + b + c u, u an input. */
+export const drivenRule = (options?: NamedRuleOptions): Rule => named(driven, options);

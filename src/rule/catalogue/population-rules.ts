@@ -1,0 +1,176 @@
+import type { Rule } from "../rule.js";
+import { type DelayOption, past } from "./delay.js";
+import { type NamedRuleOptions, named } from "./named.js";
+import type { CatalogueEntry } from "./named-rule.js";
+import {
+  capacity,
+  fraction,
+  growth,
+  inLevels,
+  level,
+  other,
+  perLevel,
+  positive,
+  pure,
+  rate,
+} from "./quantities.js";
+
+const delayed = (lag: number): CatalogueEntry => ({
+  name: "delayedDensity",
+  title: `Density that acts ${lag} periods late`,
+  text: `N[t+1] = N*exp(r*(1 - ${past("N", lag)}/K))`,
+  source: "Levin and May (1976), A note on difference-delay equations, Theor. Popul. Biol. 9, 178-187",
+  quantities: { N: level, r: rate, K: capacity },
+  holds: ["r > 0", "K > 0", "N0 >= 0"],
+  bounds: { r: positive, K: positive, N: positive },
+  guesses: { r: 0.3 },
+  equilibria: [{ at: { N: "0" } }, { at: { N: "K" }, ...(lag === 0 ? { multiplier: "1 - r" } : {}) }],
+  closedForms: [],
+  remarks: `Stable if and only if r lies between 0 and 2*cos(pi*T/(2*T + 1)) = ${(2 * Math.cos((Math.PI * lag) / (2 * lag + 1))).toPrecision(6)}.`,
+});
+
+const host = other("host level", "level");
+const parasitoid = other("parasitoid level", "level");
+const search = perLevel("searching efficiency");
+const yieldOf = pure("parasitoids from one host attacked");
+
+const nicholsonBailey: CatalogueEntry = {
+  name: "nicholsonBailey",
+  title: "Host and parasitoid with random search",
+  text: "spared = exp(-a*P)\nH[t+1] = lam*H*spared\nP[t+1] = c*H*(1 - spared)",
+  source:
+    "Nicholson and Bailey (1935), The balance of animal populations, Proc. Zool. Soc. Lond. 105, 551-598",
+  quantities: { H: host, P: parasitoid, lam: growth, a: search, c: yieldOf },
+  holds: ["lam > 1", "a > 0", "c > 0", "H0 >= 0", "P0 >= 0"],
+  bounds: { lam: [1, Number.POSITIVE_INFINITY], a: positive, c: positive, H: positive, P: positive },
+  guesses: { lam: 2, c: 1 },
+  equilibria: [{ at: { H: "lam*log(lam)/((lam - 1)*a*c)", P: "log(lam)/a" } }],
+  closedForms: [],
+  remarks: "Always unstable: swings grow until one of the two is gone.",
+};
+
+const clumped: CatalogueEntry = {
+  name: "clumpedParasitoid",
+  title: "Host and parasitoid with clumped search",
+  text: "spared = (1 + a*P/k)^(-k)\nH[t+1] = lam*H*spared\nP[t+1] = c*H*(1 - spared)",
+  source: "May (1978), Host-parasitoid systems in patchy environments, J. Anim. Ecol. 47, 833-844",
+  quantities: {
+    H: host,
+    P: parasitoid,
+    lam: growth,
+    a: search,
+    c: yieldOf,
+    k: pure("clumping, smaller is more clumped"),
+  },
+  holds: ["lam > 1", "a > 0", "c > 0", "k > 0", "H0 >= 0", "P0 >= 0"],
+  bounds: {
+    lam: [1, Number.POSITIVE_INFINITY],
+    a: positive,
+    c: positive,
+    k: positive,
+    H: positive,
+    P: positive,
+  },
+  guesses: { lam: 2, c: 1, k: 0.5 },
+  equilibria: [
+    {
+      at: {
+        H: "lam*k*(lam^(1/k) - 1)/((lam - 1)*a*c)",
+        P: "k*(lam^(1/k) - 1)/a",
+      },
+    },
+  ],
+  closedForms: [],
+  remarks: "Stable if and only if k < 1.",
+};
+
+const competition: CatalogueEntry = {
+  name: "competition",
+  title: "Two competitors in steps",
+  text: "N1[t+1] = R1*N1/(1 + (N1 + a12*N2)/M1)\nN2[t+1] = R2*N2/(1 + (N2 + a21*N1)/M2)",
+  source:
+    "Leslie and Gower (1958), The properties of a stochastic model for two competing species, Biometrika 45, 316-330",
+  quantities: {
+    N1: level,
+    N2: level,
+    R1: growth,
+    R2: growth,
+    M1: inLevels("crowding scale of the first"),
+    M2: inLevels("crowding scale of the second"),
+    a12: pure("effect of one of the second on the first"),
+    a21: pure("effect of one of the first on the second"),
+  },
+  holds: ["R1 > 1", "R2 > 1", "M1 > 0", "M2 > 0", "a12 >= 0", "a21 >= 0", "N10 >= 0", "N20 >= 0"],
+  bounds: {
+    N1: positive,
+    N2: positive,
+    R1: positive,
+    R2: positive,
+    M1: positive,
+    M2: positive,
+    a12: positive,
+    a21: positive,
+  },
+  guesses: { R1: 1.5, R2: 1.5, a12: 0.5, a21: 0.5 },
+  equilibria: [
+    { at: { N1: "0", N2: "0" } },
+    { at: { N1: "M1*(R1 - 1)", N2: "0" } },
+    { at: { N1: "0", N2: "M2*(R2 - 1)" } },
+    {
+      at: {
+        N1: "(M1*(R1 - 1) - a12*M2*(R2 - 1))/(1 - a12*a21)",
+        N2: "(M2*(R2 - 1) - a21*M1*(R1 - 1))/(1 - a12*a21)",
+      },
+      when: "a12*a21 != 1",
+    },
+  ],
+  closedForms: [],
+  remarks:
+    "They stay together if and only if each can grow into the other's rest level. The system is monotone: no chaos.",
+};
+
+/** What adults and recruits need: the delay, and whether more adults always mean more recruits. */
+export interface RecruitOption extends DelayOption {
+  readonly recruits?: "rising" | "humped";
+}
+
+function adults(lag: number, recruits: "rising" | "humped"): CatalogueEntry {
+  const parents = past("B", lag);
+  const born = recruits === "rising" ? `a*${parents}/(1 + b*${parents})` : `a*${parents}*exp(-b*${parents})`;
+  const rest = recruits === "rising" ? "(a/(1 - s) - 1)/b" : "log(a/(1 - s))/b";
+  return {
+    name: "adultsAndRecruits",
+    title: `Adults that survive, and recruits ${lag} periods late`,
+    text: `B[t+1] = s*B + ${born}`,
+    source: "Clark (1976), A delayed-recruitment model of population dynamics, J. Math. Biol. 3, 381-391",
+    quantities: {
+      B: level,
+      s: pure("share of adults that survive a period"),
+      a: growth,
+      b: perLevel("crowding of recruits"),
+    },
+    holds: ["s >= 0 and s < 1", "a > 0", "b > 0", "B0 >= 0"],
+    bounds: { s: fraction, a: positive, b: positive, B: positive },
+    guesses: { s: 0.6, a: 1 },
+    equilibria: [{ at: { B: "0" } }, { at: { B: rest }, when: "a > 1 - s" }],
+    closedForms: [],
+    remarks:
+      "It rests where (1 - s)*B equals the recruits. The delay can upset the rest level where recruits are humped, not where they rise.",
+  };
+}
+
+/** N' = N exp(r (1 - N[t-lag]/K)). */
+export const delayedDensityRule = ({ lag, ...options }: NamedRuleOptions & DelayOption): Rule =>
+  named(delayed(lag), options);
+/** H' = lam H e^(-aP), P' = c H (1 - e^(-aP)). */
+export const nicholsonBaileyRule = (options?: NamedRuleOptions): Rule => named(nicholsonBailey, options);
+/** The same with (1 + aP/k)^(-k) spared. */
+export const clumpedParasitoidRule = (options?: NamedRuleOptions): Rule => named(clumped, options);
+/** N1' = R1 N1/(1 + (N1 + a12 N2)/M1), and the same for N2. */
+export const competitionRule = (options?: NamedRuleOptions): Rule => named(competition, options);
+/** B' = s B + F(B[t-lag]), F rising or humped. */
+export const adultsAndRecruitsRule = ({
+  lag,
+  recruits = "rising",
+  ...options
+}: NamedRuleOptions & RecruitOption): Rule => named(adults(lag, recruits), options);

@@ -1,0 +1,138 @@
+import type { Rule } from "../rule.js";
+import { type NamedRuleOptions, named } from "./named.js";
+import type { CatalogueEntry, NamedQuantity } from "./named-rule.js";
+import { fraction, inLevels, level, positive, pure } from "./quantities.js";
+
+const upTo = (count: number): readonly number[] => Array.from({ length: count }, (_, i) => i + 1);
+
+function record<T>(names: readonly string[], value: T): Record<string, T> {
+  return Object.fromEntries(names.map((name) => [name, value]));
+}
+
+function ages(count: number): CatalogueEntry {
+  const all = upTo(count);
+  const births = all.map((k) => `f${k}*n${k}`).join(" + ");
+  const later = all.slice(1).map((k) => `n${k}[t+1] = s${k - 1}*n${k - 1}`);
+  const survivals = all.slice(1).map((k) => `s${k - 1}`);
+  const fertilities = all.map((k) => `f${k}`);
+  return {
+    name: "ages",
+    title: `Projection matrix of ${count} ages`,
+    text: [`n1[t+1] = ${births}`, ...later].join("\n"),
+    source: "Leslie (1945), On the use of matrices in certain population mathematics, Biometrika 33, 183-212",
+    quantities: {
+      ...record(
+        all.map((k) => `n${k}`),
+        level,
+      ),
+      ...record(fertilities, pure("young a period from one of that age")),
+      ...record(survivals, pure("share that lives on to the next age")),
+    },
+    holds: [
+      ...fertilities.map((name) => `${name} >= 0`),
+      ...survivals.map((name) => `${name} >= 0 and ${name} <= 1`),
+    ],
+    bounds: { ...record(fertilities, positive), ...record(survivals, fraction) },
+    equilibria: [
+      {
+        at: record(
+          all.map((k) => `n${k}`),
+          "0",
+        ),
+      },
+    ],
+    closedForms: [],
+    remarks: "In the long run it grows by the dominant root, in stable proportions; elasticities sum to 1.",
+  };
+}
+
+/** Names of stages, and which moves between them may happen; a share not listed is zero. */
+export interface StageOption {
+  readonly stages: readonly string[];
+  /** Pairs [from, to]; default every pair. */
+  readonly moves?: readonly (readonly [from: string, to: string])[];
+}
+
+function stages({ stages: names, moves }: StageOption): CatalogueEntry {
+  const all = moves ?? names.flatMap((from) => names.map((to) => [from, to] as const));
+  const share = (from: string, to: string): string => `p_${from}_${to}`;
+  const text = names.map((to) => {
+    const terms = all.filter((move) => move[1] === to).map(([from]) => `${share(from, to)}*${from}`);
+    return `${to}[t+1] = ${terms.length === 0 ? "0" : terms.join(" + ")}`;
+  });
+  const shares = all.map(([from, to]) => share(from, to));
+  return {
+    name: "stages",
+    title: "Shares that move between stages, as in overdue buckets of a loan book",
+    text: text.join("\n"),
+    source: "common practice, no source",
+    quantities: {
+      ...record<NamedQuantity>(names, level),
+      ...Object.fromEntries(
+        all.map(([from, to]) => [share(from, to), pure(`share of ${from} that moves to ${to}`)]),
+      ),
+    },
+    holds: shares.map((name) => `${name} >= 0`),
+    bounds: record(shares, positive),
+    equilibria: [],
+    closedForms: [],
+    remarks:
+      "Stages that nothing leaves, such as cleared and written off, fill up. Shares drift with season and policy.",
+  };
+}
+
+/** How long goods last, and which are given out first. */
+export interface ShelfOption {
+  readonly life: number;
+  readonly issue?: "oldest-first" | "newest-first";
+}
+
+function shelf(life: number, issue: "oldest-first" | "newest-first"): CatalogueEntry {
+  const all = upTo(life);
+  const order = issue === "oldest-first" ? [...all].reverse() : all;
+  const used = order.map((k, i) => {
+    const left = ["d", ...order.slice(0, i).map((done) => `used${done}`)].join(" - ");
+    return `used${k} = min(a${k}, ${left})`;
+  });
+  const next = all.slice(1).map((k) => `a${k}[t+1] = a${k - 1} - used${k - 1}`);
+  const short = ["d", ...all.map((k) => `used${k}`)].join(" - ");
+  return {
+    name: "perishable",
+    title: `Goods that last ${life} periods, ${issue === "oldest-first" ? "oldest" : "newest"} first`,
+    text: [...used, `outdated = a${life} - used${life}`, `short = ${short}`, "a1[t+1] = q", ...next].join(
+      "\n",
+    ),
+    source: "common practice, no source",
+    inputs: ["q", "d"],
+    quantities: {
+      ...record(
+        all.map((k) => `a${k}`),
+        level,
+      ),
+      q: inLevels("received at the end of the period"),
+      d: inLevels("demand of the period"),
+    },
+    holds: all.map((k) => `a${k}0 >= 0`),
+    bounds: record(
+      all.map((k) => `a${k}`),
+      positive,
+    ),
+    equilibria: [],
+    closedForms: [],
+    remarks:
+      "Which goods are given out first decides the waste. Demand beyond the shelf is lost, and reported as short.",
+  };
+}
+
+/** n1' = f1 n1 + f2 n2 + ..., n2' = s1 n1, ... */
+export const agesRule = ({ ages: count, ...options }: NamedRuleOptions & { readonly ages: number }): Rule =>
+  named(ages(count), options);
+/** v' = P v, one share p_from_to a move. */
+export const stagesRule = ({ stages: names, moves, ...options }: NamedRuleOptions & StageOption): Rule =>
+  named(stages(moves === undefined ? { stages: names } : { stages: names, moves }), options);
+/** Age classes a1 (newest) to the oldest, receipts q, demand d. */
+export const perishableRule = ({
+  life,
+  issue = "oldest-first",
+  ...options
+}: NamedRuleOptions & ShelfOption): Rule => named(shelf(life, issue), options);

@@ -1,0 +1,53 @@
+import type { Warning } from "../numeric/index.js";
+import type { NamedRule } from "./catalogue/named-rule.js";
+import { checkOptions } from "./check/check-options.js";
+import type { Declared } from "./check/checked-rule.js";
+import { memoryOf } from "./graph/build-graph.js";
+import type { RecurrenceOptions } from "./recurrence-options.js";
+import type { Rule } from "./rule.js";
+import { defineRule, keepDefinition } from "./rule-definition.js";
+import { unitFindings } from "./units/unit-findings.js";
+
+function copyOf<T>(given: Readonly<Record<string, T>> | undefined): Readonly<Record<string, T>> {
+  const entries = Object.entries(given ?? {}).map(([name, value]) => [
+    name,
+    typeof value === "object" && value !== null
+      ? Object.freeze(Array.isArray(value) ? [...value] : { ...value })
+      : value,
+  ]);
+  return Object.freeze(Object.fromEntries(entries));
+}
+
+/** Reads, checks and keeps a rule; `named` is what the catalogue knows of it. */
+export function makeRule(text: string, options: RecurrenceOptions, named?: NamedRule): Rule {
+  const normal = text.normalize("NFC").replace(/\r\n?/gu, "\n");
+  const declared: Declared = { constants: options.constants, inputs: options.inputs ?? [] };
+  const definition = defineRule(normal, declared);
+  const { checked } = definition;
+  checkOptions(checked, options);
+  const first = checked.statements.find(({ kind }) => kind !== "quantity")!;
+  const findings: readonly Warning[] = Object.freeze([
+    ...checked.findings,
+    ...unitFindings(checked, options.units ?? {}),
+  ]);
+  const rule: Rule = Object.freeze({
+    kind: "rule",
+    text: normal,
+    form: first.kind === "change" ? "change" : "next",
+    states: Object.freeze([...checked.states]),
+    memory: Object.freeze(memoryOf(checked).map((kept) => Object.freeze(kept))),
+    quantities: Object.freeze([...checked.quantities]),
+    inputs: Object.freeze([...checked.inputs]),
+    constants: Object.freeze([...checked.constants]),
+    units: copyOf(options.units),
+    bounds: copyOf(options.bounds),
+    guesses: copyOf(options.guesses),
+    fixed: copyOf(options.fixed),
+    initial: copyOf(options.initial),
+    noise: copyOf(options.noise),
+    findings,
+    ...(named === undefined ? {} : { named }),
+  });
+  keepDefinition(rule, definition);
+  return rule;
+}
