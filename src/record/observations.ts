@@ -49,6 +49,8 @@ export interface ObservedGroup {
 export interface Observations {
   readonly kind: "observations";
   readonly groups: readonly ObservedGroup[];
+  /** Columns that tell the groups apart; absent where there is a single group. */
+  readonly by?: readonly string[];
   readonly states: readonly ObservedState[];
   readonly inputs: readonly string[];
   /** The period column, its unit, and the length of one step in that unit. */

@@ -79,6 +79,7 @@ function assemble(
   return Object.freeze({
     kind: "observations",
     groups: Object.freeze(groups),
+    ...(options.by !== undefined && { by: Object.freeze([options.by].flat()) }),
     states: Object.freeze(states.map((state) => Object.freeze(state))),
     inputs: Object.freeze(inputsOf(options).map(([input]) => input)),
     period: Object.freeze({ column: axis.column, unit: step.of, step, ...(name && { calendar: name }) }),
