@@ -35,10 +35,11 @@ export function warmPictures(): void {
 function startedWorker(): Worker {
   if (worker) return worker;
   const started = new Worker(workerFile());
-  started.unref();
   started.on("message", ({ id, png }: { id: number; png?: Uint8Array }) => settle(id, png));
   started.on("error", () => giveUp());
   started.on("exit", () => giveUp());
+  // After the listeners, because adding one makes a program wait for the thread again.
+  started.unref();
   worker = started;
   return started;
 }
