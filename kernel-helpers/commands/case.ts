@@ -1,5 +1,5 @@
 import { libraryAgain, warmPictures } from "../figures/index.js";
-import { escapeHtml, look, showing, typeface } from "../tables/index.js";
+import { type Bundle, escapeHtml, look, raised, showing, typeface } from "../tables/index.js";
 import { type CaseHead, caseLog, defaultSeed } from "./case-log.js";
 import { cautionOf, type Domain, domainCautions } from "./cautions.js";
 import { refuseEmptyAnswer, refuseNoCase, refuseUnanswered, refuseUnknownDomain } from "./refusals.js";
@@ -43,6 +43,9 @@ export function openCase(options: CaseOptions): void {
         `<p style="margin:.3em 0;font-size:16px">${escapeHtml(head.question)}</p>` +
         `<p style="margin:0;color:${look.quiet};font-size:13px">${escapeHtml(under)}</p>`,
       `${head.title}\n${head.question}\n${under}`,
+      {
+        "application/vnd.periodwise.case+json": { title: head.title, question: head.question, about: under },
+      },
     ),
   );
 }
@@ -55,7 +58,8 @@ export function openCase(options: CaseOptions): void {
  * @throws {ModelError} `no-case-open` | `empty-answer`.
  * @example answer(`Draw down at hour 138. ${ready.sentence}`);
  */
-export function answer(sentence: string): void {
+export function answer(said: string): void {
+  const sentence = raised(said);
   if (caseLog.head() === undefined) throw refuseNoCase("answer(...)");
   if (sentence.trim() === "") throw refuseEmptyAnswer();
   caseLog.noteAnswer(sentence);
@@ -89,8 +93,8 @@ export function closeCase(): void {
   show(showing({ kind: "case-end" }, () => shownTogether([limits, rerunBlock()])));
 }
 
-function block(html: string, text: string): Shown {
-  return showing({ kind: "block" }, () => ({ "text/html": boxed(html), "text/plain": text }));
+function block(html: string, text: string, more: Bundle = {}): Shown {
+  return showing({ kind: "block" }, () => ({ ...more, "text/html": boxed(html), "text/plain": text }));
 }
 
 function boxed(html: string): string {

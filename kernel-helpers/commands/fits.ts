@@ -10,8 +10,9 @@ import {
 import type { Observations } from "../../src/record/index.js";
 import type { Rule } from "../../src/rule/index.js";
 import { type Figure, fittedFigure, profileFigure } from "../figures/index.js";
-import { showing, type Table, table } from "../tables/index.js";
+import { raised, showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { cautionsByGroup } from "./cautions-by-group.js";
 import { shownTogether } from "./shown-together.js";
 
 /**
@@ -37,6 +38,7 @@ function estimatesTable(fitted: Fit): Table {
   const limit = (value: number | undefined): number | string => value ?? "none";
   const rows = estimates(fitted).map((row: EstimateRow) => ({
     ...row,
+    unit: raised(row.unit),
     error: row.standardError ?? "not determined",
     lower: limit(row.profile.lower),
     upper: limit(row.profile.upper),
@@ -47,9 +49,9 @@ function estimatesTable(fitted: Fit): Table {
     columns: [
       ...(grouped ? [{ key: "group", label: "Group", kind: "text" } as const] : []),
       { key: "name", label: "Constant", kind: "text" },
-      { key: "unit", label: "Unit", kind: "text" },
+      ...(rows.some((row) => row.unit !== "") ? [{ key: "unit", label: "Unit", kind: "text" } as const] : []),
       { key: "value", label: "Estimate", kind: "estimate", pairedWith: "standardError" },
-      { key: "error", label: "Standard error", kind: "number", digits: 2 },
+      { key: "error", label: "Standard error", kind: "estimate" },
       {
         key: "lower",
         label: `Profile interval ${percent}, from`,
@@ -61,7 +63,7 @@ function estimatesTable(fitted: Fit): Table {
     rows,
     notes: [
       ...fitted.groups.flatMap((group) => groupNotes(fitted, group)),
-      ...warningsOf(fitted),
+      ...cautionsByGroup([{ group: "", warnings: fitted.warnings }, ...fitted.groups]),
       ...fitted.conventions,
     ],
   });
@@ -76,18 +78,6 @@ function groupNotes(fitted: Fit, group: GroupFit): string[] {
   return [
     `${who}${group.count} residuals, sigma ${sigma}, AICc ${group.criteria.aicCorrected.toFixed(2)}. ${told}`,
   ];
-}
-
-function warningsOf(fitted: Fit): string[] {
-  const all = [
-    ...fitted.warnings.map((warning) => warning.message),
-    ...fitted.groups.flatMap((group) =>
-      group.warnings.map((warning) =>
-        group.group === "" ? warning.message : `${group.group}: ${warning.message}`,
-      ),
-    ),
-  ];
-  return all.map((message) => `Caution: ${message}`);
 }
 
 function observedAndFitted(fitted: Fit): Figure[] {

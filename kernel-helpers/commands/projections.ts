@@ -8,6 +8,7 @@ import {
 import { type Figure, fanFigure, type ProjectedSeries } from "../figures/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { cautionsByGroup } from "./cautions-by-group.js";
 import { shownTogether } from "./shown-together.js";
 
 /**
@@ -100,8 +101,6 @@ function notesOf(ahead: Forecast): string[] {
   return [
     "Mean path: uncertainty of the constants. Future observation: that and the error of a single value.",
     `${paths} drawn paths, seed ${seed}; quantiles by definition 7.`,
-    ...ahead.groups.flatMap((group) =>
-      group.warnings.map((w) => `Caution: ${group.group === "" ? "" : `${group.group}: `}${w.message}`),
-    ),
+    ...cautionsByGroup(ahead.groups),
   ];
 }

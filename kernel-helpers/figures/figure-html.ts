@@ -1,4 +1,4 @@
-import { escapeHtml, look, type Table, tableHtml, typeface } from "../tables/index.js";
+import { escapeHtml, look, raised, type Table, tableHtml, typeface } from "../tables/index.js";
 import type { Figure } from "./figure.js";
 import { figureAccount } from "./figure-account.js";
 import { plotSpec } from "./plot-spec.js";
@@ -26,7 +26,7 @@ export function figureHtml({ figure, numbers, notes, picture, library }: FigureP
   const image = picture
     ? `<img class="pw-picture" src="data:image/png;base64,${picture}" alt="${escapeHtml(figure.title)}. ${account}" style="max-width:100%;height:auto">`
     : "";
-  const shownNotes = notes.map((note) => `<p dir="auto">${escapeHtml(note)}</p>`).join("");
+  const shownNotes = notes.map((note) => `<p dir="auto">${escapeHtml(raised(note))}</p>`).join("");
   return [
     `<div class="pw-figure${picture ? " pw-pictured" : ""}">${figureStyle}`,
     `<div class="pw-title" dir="auto">${escapeHtml(figure.title)}</div>`,

@@ -1,4 +1,4 @@
-import { oneLine } from "../tables/index.js";
+import { oneLine, raised } from "../tables/index.js";
 
 /**
  * Text for a plot's labels, which read a little HTML: shown as it is, broken into lines at words.
@@ -33,7 +33,8 @@ function brokenLines(text: string, columns: number, lines: number): string[] {
     : [...broken.slice(0, lines - 1), `${broken[lines - 1]?.replace(/…$/, "")}…`];
 }
 
-/** "Density (10^4 cells/mL)": what an axis measures, with its unit. */
+/** "Density (10⁴ cells/mL)": what an axis measures, with its unit unless that is the same word. */
 export function axisTitle(axis: { readonly title: string; readonly unit?: string }): string {
-  return axis.unit ? `${axis.title} (${axis.unit})` : axis.title;
+  if (!axis.unit || axis.unit.toLowerCase() === axis.title.toLowerCase()) return axis.title;
+  return `${axis.title} (${raised(axis.unit)})`;
 }

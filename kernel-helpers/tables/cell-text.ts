@@ -10,12 +10,16 @@ type Row = Readonly<Record<string, unknown>>;
 /**
  * A cell as text, by its column's kind and the digits that count.
  *
+ * @param decimals - for a column of plain numbers whose decimals are settled together.
  * @returns text with "-" for minus; `absent` for undefined, null and NaN.
  */
-export function cellText(column: Column, row: Row, format: NumberFormat): string {
+export function cellText(column: Column, row: Row, format: NumberFormat, decimals?: number): string {
   const value = row[column.key];
   if (value === undefined || value === null || Number.isNaN(value)) return absent;
   if (typeof value === "bigint") return written(wholeText(column, value, format), format);
+  if (typeof value === "number" && Number.isFinite(value) && decimals !== undefined) {
+    return written(fixedDecimals(value, decimals), format);
+  }
   if (typeof value === "number") return numberText(column, value, row, format);
   if (typeof value === "boolean") return value ? "yes" : "no";
   if (value instanceof Date) return value.toISOString().slice(0, 10);

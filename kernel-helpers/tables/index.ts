@@ -3,6 +3,7 @@ export { escapeHtml } from "./escape-html.js";
 export { look, typeface } from "./look.js";
 export { type NumberFormat, numberFormat, written } from "./number-format.js";
 export { oneLine } from "./plain-text.js";
+export { raised } from "./raised.js";
 export { type Bundle, bundleOf, showing } from "./show-itself.js";
 export { tabSeparated } from "./tab-separated.js";
 export {

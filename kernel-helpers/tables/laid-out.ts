@@ -1,5 +1,7 @@
 import { absent, cellText } from "./cell-text.js";
+import { commonDecimals } from "./common-decimals.js";
 import { written } from "./number-format.js";
+import { raised } from "./raised.js";
 import type { Column, Footnote, Table } from "./table.js";
 
 /** One cell ready to be drawn: its text, the letter of its footnote, and whether it is a number. */
@@ -27,9 +29,11 @@ export function laidOut(table: Table): LaidOut {
   const tail = cut ? limit - head : 0;
   const places = [...Array(head).keys(), ...Array.from({ length: tail }, (_, i) => rows.length - tail + i)];
   const marks = footnoteMarks(table.notes);
-  const texts = [...places.map((place) => rows[place] ?? {}), ...totals].map((row) =>
-    columns.map((column) =>
-      totals.includes(row) && row[column.key] === undefined ? "" : cellText(column, row, format),
+  const shown = [...places.map((place) => rows[place] ?? {}), ...totals];
+  const decimals = columns.map((column) => settledDecimals(column, shown));
+  const texts = shown.map((row) =>
+    columns.map((column, j) =>
+      totals.includes(row) && row[column.key] === undefined ? "" : cellText(column, row, format, decimals[j]),
     ),
   );
   alignFractions(texts, columns, format.decimal);
@@ -56,10 +60,19 @@ export function laidOut(table: Table): LaidOut {
   };
 }
 
-/** "Density (10^4 cells/mL)": the label with its unit; a money column without one takes the currency set. */
+function settledDecimals(
+  column: Column,
+  rows: readonly Readonly<Record<string, unknown>>[],
+): number | undefined {
+  if (column.kind !== "number") return undefined;
+  const values = rows.map((row) => row[column.key]).filter((value) => typeof value === "number");
+  return commonDecimals(values, column.digits ?? 4);
+}
+
+/** "Density (10⁴ cells/mL)": the label with its unit; a money column without one takes the currency set. */
 export function heading(column: Column, table: Table): string {
   const unit = column.unit || (column.kind === "money" ? table.format.currency : "");
-  return unit === "" ? column.label : `${column.label} (${unit})`;
+  return unit === "" ? column.label : `${column.label} (${raised(unit)})`;
 }
 
 function cutNote(head: number, tail: number, all: number, { format }: Table): string {
@@ -83,8 +96,8 @@ function footnoteMarks(notes: Table["notes"]): {
         .map(letter)
         .join(","),
     notes: notes.map((note) => {
-      if (typeof note === "string") return { mark: "", text: note };
-      return { mark: placed.includes(note) ? letter(note) : "", text: note.text };
+      if (typeof note === "string") return { mark: "", text: raised(note) };
+      return { mark: placed.includes(note) ? letter(note) : "", text: raised(note.text) };
     }),
   };
 }
