@@ -64,8 +64,8 @@ function testsTable(checked: Check): Table {
 
 function recoveryTable(checked: Check): Table {
   const { refits, seed } = checked.options;
-  const level = Math.round(100 * (checked.groups[0]?.recovery.level ?? 0.95));
-  const failed = checked.groups.reduce((sum, group) => sum + group.recovery.failed, 0);
+  const level = Math.round(100 * (checked.groups[0]?.recovery?.level ?? 0.95));
+  const failed = checked.groups.reduce((sum, group) => sum + (group.recovery?.failed ?? 0), 0);
   return table({
     title: "Constants found again in records drawn from the fit",
     columns: [
@@ -83,7 +83,7 @@ function recoveryTable(checked: Check): Table {
       },
     ],
     rows: checked.groups.flatMap((group) =>
-      group.recovery.unknowns.map((unknown) => ({ group: group.group, ...unknown })),
+      (group.recovery?.unknowns ?? []).map((unknown) => ({ group: group.group, ...unknown })),
     ),
     notes: [
       `${refits} drawn records${checked.groups.length > 1 ? " a group" : ""}, seed ${seed}; held: a refit at the true value stays under the cut of the profile.`,

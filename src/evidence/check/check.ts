@@ -22,7 +22,8 @@ export interface GroupCheck {
   readonly tests: readonly ResidualTest[];
   readonly windows: readonly Window[];
   readonly lackOfFit: readonly LackOfFit[];
-  readonly recovery: Recovery;
+  /** Undefined where the fit is not one of least squares. */
+  readonly recovery: Recovery | undefined;
   /** Undefined where the other kind of error could not be fitted. */
   readonly errors: ErrorAdvice | undefined;
   /** What speaks against the fit, as whole sentences; empty where nothing does. */

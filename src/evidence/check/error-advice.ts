@@ -1,8 +1,7 @@
 import { type Fit, fit as fitRule, type GroupFit } from "../../estimate/index.js";
 import { ModelError, type RandomStream } from "../../numeric/index.js";
-import { type CompiledRule, compileRule } from "../../rule/index.js";
 import { recordDrawer } from "../refit/record-drawer.js";
-import { type Refitter, refitProblem, refitter } from "../refit/refitter.js";
+import { type Refitter, refitter } from "../refit/refitter.js";
 import { autocorrelations } from "../statistics/autocorrelation.js";
 import { residualSeries } from "./residual-series.js";
 
@@ -50,7 +49,7 @@ export function errorAdvice(
   const observation = sideOf(fit, group, "observation");
   if (process === undefined || observation === undefined) return undefined;
   const measure = differenceOf(process, observation);
-  const difference = measure(process.again.compared.values);
+  const difference = measure(process.again.recorded);
   const expected = {
     process: expectedOf(process, measure, draws, stream),
     observation: expectedOf(observation, measure, draws, stream),
@@ -70,9 +69,7 @@ export function errorAdvice(
 interface Side {
   readonly fit: Fit;
   readonly group: GroupFit;
-  readonly compiled: CompiledRule;
   readonly again: Refitter;
-  readonly at: Float64Array;
 }
 
 /** The fit of one kind, taken over where it is the one given. */
@@ -80,20 +77,18 @@ function sideOf(given: Fit, group: GroupFit, errors: Single): Side | undefined {
   const fit = given.options.errors === errors ? given : otherFit(given, group, errors);
   const own = fit?.groups.find((each) => each.group === group.group);
   if (fit === undefined || own === undefined || !(own.sigma > 0)) return undefined;
-  const compiled = compileRule(fit.rule);
-  return {
-    fit,
-    group: own,
-    compiled,
-    again: refitter(refitProblem(fit, own), compiled),
-    at: Float64Array.from(own.estimates, (estimate) => estimate.value),
-  };
+  const again = refitter(fit, own);
+  return again && { fit, group: own, again };
 }
 
 function otherFit(given: Fit, group: GroupFit, errors: Single): Fit | undefined {
   const groups = given.observations.groups.filter((each) => each.name === group.group);
   try {
-    return fitRule(given.rule, { ...given.observations, groups }, { ...given.options, errors });
+    return fitRule(
+      given.rule,
+      { ...given.observations, groups },
+      { ...given.options, errors, intervals: "none" },
+    );
   } catch (cause) {
     // Too few pairs for the other kind, for instance: then there is nothing to compare.
     if ((cause as Error).name === ModelError.name) return undefined;
@@ -101,43 +96,31 @@ function otherFit(given: Fit, group: GroupFit, errors: Single): Fit | undefined 
   }
 }
 
-/** The difference of log-likelihoods of the values after the first, for a record [rows, states]. */
+/** The difference of log-likelihoods of the values that both compare, for a record [rows, states]. */
 function differenceOf(process: Side, observation: Side): (values: Float64Array) => number {
-  const { compared } = observation.again;
-  const first = compared.row.findIndex((row) => row > 0);
-  const fitted = new Float64Array(compared.count);
-  const states = observation.fit.rule.states.length;
-  const log = observation.fit.options.spread === "proportional";
+  const { rows } = observation.again;
+  const shared = new Set(process.again.rows.entries);
+  const own = Array.from(rows.entries, (_, i) => i).filter((i) => !shared.has(rows.entries[i]!));
+  const count = process.again.rows.count;
   return (values) => {
-    process.again.use(values);
-    observation.again.use(values);
-    const steps = process.again.minimise(process.at);
-    const path = observation.again.minimise(observation.at);
-    observation.again.fitted(path.estimates, fitted);
-    let sum = path.sumOfSquares;
-    for (let i = 0; i < first; i++) {
-      const value = values[compared.row[i]! * states + compared.state[i]!]!;
-      const residual = log ? Math.log(value / fitted[i]!) : value - fitted[i]!;
-      sum -= residual * residual;
-    }
-    const count = process.again.compared.count;
+    process.again.take(values);
+    observation.again.take(values);
+    const steps = process.again.minimise(process.again.at);
+    const path = observation.again.minimise(observation.again.at);
+    rows.prepare(path.estimates, false);
+    const sum = own.reduce((left, i) => left - rows.residualAt(i) ** 2, path.sumOfSquares);
     return (-count / 2) * Math.log(sum / steps.sumOfSquares);
   };
 }
 
 function expectedOf(
-  side: Side,
+  { fit, group, again }: Side,
   measure: (values: Float64Array) => number,
   draws: number,
   stream: RandomStream,
 ): { readonly mean: number; readonly deviation: number } {
-  const draw = recordDrawer(
-    refitProblem(side.fit, side.group),
-    side.compiled,
-    side.again.compared,
-    side.group.sigma,
-  );
-  const values = new Float64Array(side.again.compared.values.length);
+  const draw = recordDrawer(fit, again, group.sigma);
+  const values = new Float64Array(again.recorded.length);
   const found: number[] = [];
   for (let tries = 0; found.length < draws && tries < 2 * draws; tries++) {
     const difference = draw(stream, values) ? measure(values) : Number.NaN;

@@ -1,8 +1,7 @@
 import type { Fit, GroupFit } from "../../estimate/index.js";
 import { type Minimum, quantile, type RandomStream } from "../../numeric/index.js";
-import { compileRule } from "../../rule/index.js";
 import { recordDrawer } from "../refit/record-drawer.js";
-import { type Refitter, refitProblem, refitter } from "../refit/refitter.js";
+import { refitter } from "../refit/refitter.js";
 
 /** How well one unknown is found again in records drawn from the fitted rule. */
 export interface RecoveredUnknown {
@@ -36,53 +35,41 @@ export interface Recovery {
  * when the profile interval holds it.
  *
  * @param wanted - records to refit.
+ * @returns undefined where the fit is not one of least squares.
  */
-export function recovery(fit: Fit, group: GroupFit, wanted: number, stream: RandomStream): Recovery {
-  const problem = refitProblem(fit, group);
-  const compiled = compileRule(fit.rule);
-  const again = refitter(problem, compiled);
-  const draw = recordDrawer(problem, compiled, again.compared, group.sigma);
-  const truth = Float64Array.from(group.estimates, (estimate) => estimate.value);
-  const found = Array.from(truth, () => [] as number[]);
-  const covered = new Int32Array(truth.length);
-  const values = new Float64Array(again.compared.values.length);
-  const free = fit.options.cut === "chi-square" ? 0 : truth.length;
+export function recovery(
+  fit: Fit,
+  group: GroupFit,
+  wanted: number,
+  stream: RandomStream,
+): Recovery | undefined {
+  const again = refitter(fit, group);
+  if (again === undefined) return undefined;
+  const { at } = again;
+  const draw = recordDrawer(fit, again, group.sigma);
+  const found = Array.from(at, () => [] as number[]);
+  const covered = new Int32Array(at.length);
+  const values = new Float64Array(again.recorded.length);
+  const free = fit.options.cut === "chi-square" ? 0 : at.length;
   let failed = 0;
   const note = (best: Minimum): void => {
-    const most = best.sumOfSquares * (1 + group.cut / (again.compared.count - free));
-    for (let i = 0; i < truth.length; i++) {
+    const most = best.sumOfSquares * (1 + group.cut / (again.rows.count - free));
+    for (let i = 0; i < at.length; i++) {
       found[i]!.push(best.estimates[i]!);
-      covered[i] = covered[i]! + (heldSum(again, best.estimates, i, truth[i]!) <= most ? 1 : 0);
+      const held = again.minimiseHeld(best.estimates, i, at[i]!).sumOfSquares;
+      covered[i] = covered[i]! + (held <= most ? 1 : 0);
     }
   };
   while (found[0]!.length < wanted && failed < wanted) {
-    const best = draw(stream, values) ? refitTo(again, values, truth) : undefined;
-    if (best === undefined) failed++;
+    const best = draw(stream, values) ? again.minimise(at) : undefined;
+    if (best === undefined || best.stop.kind === "failed") failed++;
     else note(best);
   }
   const refits = found[0]!.length;
   const unknowns = group.estimates.map(({ name }, i) =>
-    recovered(name, truth[i]!, Float64Array.from(found[i]!), covered[i]! / refits),
+    recovered(name, at[i]!, Float64Array.from(found[i]!), covered[i]! / refits),
   );
   return { refits, failed, level: fit.options.level ?? 0.95, unknowns };
-}
-
-function refitTo(again: Refitter, values: Float64Array, start: Float64Array): Minimum | undefined {
-  again.use(values);
-  const best = again.minimise(start);
-  return best.stop.kind === "failed" ? undefined : best;
-}
-
-/** Least sum of squares with unknown `i` held at a value. */
-function heldSum(again: Refitter, from: Float64Array, i: number, value: number): number {
-  const lower = again.limits.lower.slice();
-  const upper = again.limits.upper.slice();
-  const start = from.slice();
-  lower[i] = value;
-  upper[i] = value;
-  start[i] = value;
-  const { sumOfSquares } = again.minimise(start, { lower, upper });
-  return Number.isNaN(sumOfSquares) ? Number.POSITIVE_INFINITY : sumOfSquares;
 }
 
 function recovered(name: string, truth: number, found: Float64Array, coverage: number): RecoveredUnknown {

@@ -28,12 +28,7 @@ export function concernsOf(fit: Fit, group: GroupFit, found: Found): readonly st
 /** One sentence on the whole. */
 export function verdictOf(group: GroupFit, found: Found, concerns: readonly string[]): string {
   const { recovery } = found;
-  const level = Math.round(100 * recovery.level);
-  const fewest = Math.min(...recovery.unknowns.map((unknown) => unknown.coverage));
-  const held =
-    recovery.refits > 0
-      ? `in ${recovery.refits} records drawn from it, the ${level}% intervals held the true values in ${percent(fewest)} or more`
-      : "no record could be drawn from it";
+  const held = heldText(recovery);
   const size = `${group.count} residuals`;
   const open = found.errors?.kind === "undecided" ? [found.errors.sentence] : [];
   if (concerns.length === 0)
@@ -81,8 +76,18 @@ function endConcerns(group: GroupFit, windows: readonly Window[]): string[] {
     );
 }
 
+function heldText(recovery: Found["recovery"]): string {
+  if (recovery === undefined)
+    return "its intervals were not tried on drawn records, which only least squares allows";
+  if (recovery.refits === 0) return "no record could be drawn from it";
+  const level = Math.round(100 * recovery.level);
+  const fewest = Math.min(...recovery.unknowns.map((unknown) => unknown.coverage));
+  return `in ${recovery.refits} records drawn from it, the ${level}% intervals held the true values in ${percent(fewest)} or more`;
+}
+
 function recoveryConcerns({ recovery }: Found): string[] {
   const found: string[] = [];
+  if (recovery === undefined) return found;
   if (recovery.failed > 0.05 * (recovery.refits + recovery.failed))
     found.push(
       `${recovery.failed} of ${recovery.refits + recovery.failed} drawn records could not be refitted.`,

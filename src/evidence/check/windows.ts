@@ -1,5 +1,5 @@
 import type { Fit, GroupFit } from "../../estimate/index.js";
-import { type Refitter, refitProblem, refitter } from "../refit/refitter.js";
+import { type Refitter, refitter } from "../refit/refitter.js";
 
 /** The estimates from part of the record. */
 export interface Window {
@@ -24,7 +24,8 @@ const shares = [0.2, 0.4];
  * fifths. A part with fewer values than unknowns + 3 is passed over.
  */
 export function windows(fit: Fit, group: GroupFit): readonly Window[] {
-  const again = refitter(refitProblem(fit, group));
+  const again = refitter(fit, group);
+  if (again === undefined) return [];
   const { time } = fit.observations.groups.find((each) => each.name === group.group)!;
   const last = time.length - 1;
   const cut = (share: number): number => Math.round(share * time.length);
@@ -38,11 +39,9 @@ export function windows(fit: Fit, group: GroupFit): readonly Window[] {
   return parts.flatMap(([name, from, to]) => {
     if (seen.has(`${from} ${to}`)) return [];
     seen.add(`${from} ${to}`);
-    const count = keepRows(again, from, to, fit.options.errors === "process");
-    const { names } = again;
-    if (count < names.length + 3) return [];
-    const start = Float64Array.from(group.estimates, (estimate) => estimate.value);
-    const found = again.minimise(start);
+    const [first, end] = comparedIn(again, from, to, fit.options.errors === "process");
+    if (end - first < again.at.length + 3) return [];
+    const found = again.minimiseWindow(again.at, first, end);
     if (found.stop.kind === "failed") return [];
     const estimates = group.estimates.map((estimate, i) => {
       const value = found.estimates[i]!;
@@ -50,18 +49,15 @@ export function windows(fit: Fit, group: GroupFit): readonly Window[] {
       const shift = standardError === undefined ? undefined : (value - estimate.value) / standardError;
       return { name: estimate.name, value, shift };
     });
-    return [{ name, from: time[from]!, to: time[to]!, count, estimates }];
+    return [{ name, from: time[from]!, to: time[to]!, count: end - first, estimates }];
   });
 }
 
-/** Counts only values of rows `from` to `to`, and steps within them; tells how many. */
-function keepRows({ compared, counts }: Refitter, from: number, to: number, steps: boolean): number {
-  const first = steps ? from + 1 : from;
-  let kept = 0;
-  for (let i = 0; i < counts.length; i++) {
-    const inside = compared.row[i]! >= first && compared.row[i]! <= to;
-    counts[i] = inside ? 1 : 0;
-    if (inside) kept++;
-  }
-  return kept;
+/** Compared values of rows `from` to `to`, and of steps within them: the first, and one beyond the last. */
+function comparedIn({ rows }: Refitter, from: number, to: number, steps: boolean): [number, number] {
+  const inside = (row: number): boolean => row >= (steps ? from + 1 : from) && row <= to;
+  const first = rows.entries.findIndex(inside);
+  let end = Math.max(first, 0);
+  while (end < rows.count && inside(rows.entries[end]!)) end++;
+  return [Math.max(first, 0), end];
 }

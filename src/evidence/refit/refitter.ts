@@ -1,93 +1,85 @@
-import type { Fit, FitOptions, GroupFit } from "../../estimate/index.js";
 import {
-  type Minimum,
-  minimiseSquares,
-  type SquaresWorkspace,
-  squaresWorkspace,
-} from "../../numeric/index.js";
-import type { ObservedGroup } from "../../record/index.js";
-import { type CompiledRule, compileRule, type Rule } from "../../rule/index.js";
-import { type Comparisons, comparisonsOf } from "./comparisons-of.js";
-import { residualSums } from "./residual-sums.js";
+  type Fit,
+  type FitRows,
+  type GroupFit,
+  normalEquations,
+  prepared,
+  type Unknowns,
+  unknownsOf,
+} from "../../estimate/index.js";
+import { type Minimum, minimiseSquares, squaresWorkspace } from "../../numeric/index.js";
 
-/** Limits of the unknowns in a search, [unknowns]. */
-export interface Limits {
-  readonly lower: Float64Array;
-  readonly upper: Float64Array;
-}
-
-/** A rule made ready to be fitted many times: to changed values, to part of the record, with constants held. */
+/** A group's least-squares fit made ready to be done many times: to other values, to part of the record. */
 export interface Refitter {
-  /** Free constants, then estimated initial states ("N[0]"). */
-  readonly names: readonly string[];
-  readonly limits: Limits;
-  /** Compared values: state number, row of the group, and the value in the record's own unit. */
-  readonly compared: Comparisons;
-  /** [compared]: 1 where a value counts, 0 where it is left out. Change it between searches. */
-  readonly counts: Float64Array;
-  /** Puts other values [rows, states] in the record's place. */
-  use(values: Float64Array): void;
-  minimise(start: Float64Array, limits?: Limits): Minimum;
-  sumAt(unknowns: Float64Array): number;
-  /** Writes the fitted values, own unit, of all comparisons. */
-  fitted(unknowns: Float64Array, out: Float64Array): void;
+  readonly unknowns: Unknowns;
+  readonly rows: FitRows;
+  /** [rows of the group, states]: the record. */
+  readonly recorded: Float64Array;
+  /** The fit's estimates. */
+  readonly at: Float64Array;
+  /** Puts other values [rows of the group, states] in the record's place. */
+  take(values: Float64Array): void;
+  minimise(start: Float64Array): Minimum;
+  /** The same with unknown i held at a value. */
+  minimiseHeld(start: Float64Array, i: number, value: number): Minimum;
+  /** The least sum over compared values `from` to `end` - 1 only. */
+  minimiseWindow(start: Float64Array, from: number, end: number): Minimum;
 }
 
-/** What a refit needs to know of a fit. */
-export interface RefitProblem {
-  readonly rule: Rule;
-  readonly group: ObservedGroup;
-  readonly options: FitOptions;
-  /** Free unknowns in order. */
-  readonly names: readonly string[];
-  /** Values of all constants; those of free ones do not matter. */
-  readonly constants: Readonly<Record<string, number>>;
-  readonly initial: Readonly<Record<string, number>>;
-}
-
-/** The problem that a group of a fit solved. */
-export function refitProblem(fit: Fit, group: GroupFit): RefitProblem {
+/**
+ * Makes a group's fit ready to be done again; undefined where the fit is not one of least squares (counts, both kinds
+ * of error at once).
+ */
+export function refitter(fit: Fit, group: GroupFit): Refitter | undefined {
+  const { rule, options } = fit;
+  const { spread } = options;
+  const counted = spread === "poisson" || spread === "negative-binomial";
+  const recordedGroup = fit.observations.groups.find((each) => each.name === group.group);
+  if (options.errors === "both" || counted || recordedGroup === undefined) return undefined;
+  const unknowns = unknownsOf(rule, options);
+  const { rows, system } = prepared(rule, recordedGroup, unknowns, options);
+  const { lower, upper } = unknowns;
+  const workspace = squaresWorkspace(rows.size);
+  const window = windowOf(rows);
+  const partial = normalEquations(window.rows);
   return {
-    rule: fit.rule,
-    group: fit.observations.groups.find((each) => each.name === group.group)!,
-    options: fit.options,
-    names: group.estimates.map((estimate) => estimate.name),
-    constants: group.constants,
-    initial: group.initial,
+    unknowns,
+    rows,
+    recorded: Float64Array.from(
+      { length: recordedGroup.index.length * rule.states.length },
+      (_, cell) =>
+        recordedGroup.values[rule.states[cell % rule.states.length]!]![
+          Math.floor(cell / rule.states.length)
+        ]!,
+    ),
+    at: Float64Array.from(group.estimates, (estimate) => estimate.value),
+    take: (values) => rows.take(values),
+    minimise: (start) => minimiseSquares(system, start, { lower, upper, workspace }),
+    minimiseHeld(start, i, value) {
+      const low = lower.slice();
+      const high = upper.slice();
+      const from = start.slice();
+      low[i] = value;
+      high[i] = value;
+      from[i] = value;
+      return minimiseSquares(system, from, { lower: low, upper: high, workspace });
+    },
+    minimiseWindow(start, from, end) {
+      window.set(from, end);
+      return minimiseSquares(partial, start, { lower, upper, workspace });
+    },
   };
 }
 
-/** Makes a problem ready for many searches; nothing is allocated in one but its result. */
-export function refitter(
-  problem: RefitProblem,
-  compiled: CompiledRule = compileRule(problem.rule),
-): Refitter {
-  const { rule, names, options } = problem;
-  const limits = limitsOf(rule, options, names);
-  const compared = comparisonsOf(problem.group, rule.states, options.errors);
-  const counts = new Float64Array(compared.count).fill(1);
-  const sums = residualSums(problem, compiled, compared, counts);
-  const workspace: SquaresWorkspace = squaresWorkspace(names.length);
-  const open =
-    limits.lower.every((l) => l === Number.NEGATIVE_INFINITY) &&
-    limits.upper.every((u) => u === Number.POSITIVE_INFINITY);
+/** The rows of a fit seen through a window that can be moved. */
+function windowOf(rows: FitRows): { readonly rows: FitRows; set(from: number, end: number): void } {
+  let first = 0;
+  const seen = { ...rows, residualAt: (i: number): number => rows.residualAt(first + i) };
   return {
-    names,
-    limits,
-    compared,
-    counts,
-    use: sums.use,
-    minimise: (start, held) =>
-      minimiseSquares(sums.system, start, { ...(held ?? (open ? {} : limits)), workspace }),
-    sumAt: sums.sumAt,
-    fitted: sums.fitted,
-  };
-}
-
-function limitsOf(rule: Rule, options: FitOptions, names: readonly string[]): Limits {
-  const bounds = { ...rule.bounds, ...options.bounds };
-  return {
-    lower: Float64Array.from(names, (name) => bounds[name]?.[0] ?? Number.NEGATIVE_INFINITY),
-    upper: Float64Array.from(names, (name) => bounds[name]?.[1] ?? Number.POSITIVE_INFINITY),
+    rows: seen,
+    set(from, end) {
+      first = from;
+      seen.count = end - from;
+    },
   };
 }
