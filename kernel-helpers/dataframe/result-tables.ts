@@ -27,15 +27,27 @@ function gather(part: Plain, name: string, inherited: Inherited, rows: Map<strin
   const own = seriesOf(part);
   const length = Math.max(0, ...Object.values(own).map((series) => series.length));
   const series = ofLength({ ...inherited.series, ...own }, length);
-  const list = rows.get(name) ?? [];
-  if (length > 0) for (let i = 0; i < length; i++) list.push({ ...scalars, ...at(series, i) });
-  else if (Object.keys(scalars).length > Object.keys(inherited.scalars).length) list.push(scalars);
-  if (list.length > 0) rows.set(name, list);
+  const saysMore = Object.keys(scalars).length > Object.keys(inherited.scalars).length;
+  if (length > 0)
+    add(
+      rows,
+      name,
+      Array.from({ length }, (_, i) => ({ ...scalars, ...at(series, i) })),
+    );
+  else if (saysMore) add(rows, name, [scalars]);
   for (const [child, items] of Object.entries(part)) {
-    if (isListOfParts(items)) for (const item of items) gather(item, child, { scalars, series }, rows);
-    else if (isListOfTexts(items))
-      rows.set(child, [...(rows.get(child) ?? []), ...items.map((text) => ({ ...scalars, [child]: text }))]);
+    if (isListOfTexts(items))
+      add(
+        rows,
+        child,
+        items.map((text) => ({ ...scalars, [child]: text })),
+      );
+    else if (isListOfParts(items)) for (const item of items) gather(item, child, { scalars, series }, rows);
   }
+}
+
+function add(rows: Map<string, object[]>, name: string, more: readonly object[]): void {
+  rows.set(name, [...(rows.get(name) ?? []), ...more]);
 }
 
 function isScalar(value: unknown): boolean {

@@ -1,4 +1,6 @@
-import { checkValues } from "./check-values.js";
+import { checkIdentities } from "./checks/check-identities.js";
+import { checkValues } from "./checks/check-values.js";
+import { refuseMixedUnits } from "./checks/refuse-mixed-units.js";
 import { type ColumnTable, columnNamed, rowCount } from "./column-table.js";
 import { type FindingLog, findingLog } from "./finding-log.js";
 import { groupRows } from "./group-rows.js";
@@ -21,7 +23,7 @@ import { noDataRows, noUsableRows, optionMissing } from "./refusals.js";
  * @param options - which columns hold what, and the length of one step; see {@link ObservationOptions}.
  * @returns groups in the order of their first rows, findings, and counts of rows read, used, flagged,
  *   corrected and refused.
- * @throws {ModelError} `no-data-rows` | `no-usable-rows` | `option-missing` | `option-wrong` | `missing-column` |
+ * @throws {ModelError} `no-data-rows` | `mixed-units` | `identity-unread` | `no-usable-rows` | `option-missing` | `option-wrong` | `missing-column` |
  *   `doubled-column` | `not-a-number` | `decimal-sign-unclear` | `step-missing` | `no-period` |
  *   `ambiguous-date` | `no-such-period` | `off-step` | `not-increasing` | `duplicate-period`.
  * @example
@@ -39,11 +41,23 @@ export function observations(table: ColumnTable, options: ObservationOptions): O
   const axis = periodAxis(table, options.period, options.step);
   const by = typeof options.by === "string" ? [options.by] : (options.by ?? []);
   const rows = groupRows(table, by, rowsWhere(table, options.where, read), log);
+  refuseMixedUnits(table, rows);
   const groups = rows.map((group) => observedGroup(group, columns, axis, table, options, log));
   const kept = groups.filter(({ group }) => group.index.length > 0).map(({ group }) => group);
   if (kept.length === 0) throw noUsableRows(read);
   noteSteps(kept, axis, log);
-  for (const group of kept) checkValues(group, columns.states, axis, options, log);
+  if (options.identities !== undefined)
+    checkIdentities(
+      table,
+      options.identities,
+      rows.map((group) => byPeriod(group.rows, axis)),
+      log,
+    );
+  const { measured = "level" } = options;
+  for (const group of kept) {
+    for (const state of columns.states)
+      checkValues({ group, state, values: group.values[state.name]!, measured, period: axis.column, log });
+  }
   return assemble(
     kept,
     columns.states,
@@ -53,6 +67,11 @@ export function observations(table: ColumnTable, options: ObservationOptions): O
     read,
     groups.reduce((n, g) => n + g.merged, 0),
   );
+}
+
+/** Rows by increasing period; of one period in the record's order. */
+function byPeriod(rows: Int32Array, { position }: PeriodAxis): Int32Array {
+  return rows.slice().sort((a, b) => position[a]! - position[b]! || a - b);
 }
 
 function rowsWhere(table: ColumnTable, where: ObservationOptions["where"], read: number): Int32Array {

@@ -1,0 +1,33 @@
+import { type CheckedSeries, inSeries, noteSeries, noteValue, periodOf } from "./checked-series.js";
+
+/** With a larger share of negative values than this the quantity takes both signs, and single ones are no news. */
+const bothSigns = 0.2;
+
+/** Negative levels and flows, and levels of zero, which have no logarithm and no per-head change. */
+export function belowZero(series: CheckedSeries): void {
+  const { values, state, measured } = series;
+  const negative = values.filter((value) => value < 0).length;
+  if (negative > bothSigns * values.length && values.length > 4) {
+    const message = `${negative} of ${values.length} values of ${state.column}${inSeries(series)} are below zero: rules of growth need a scale without negative values.`;
+    noteSeries(series, "both-signs", String(negative), message);
+    return;
+  }
+  values.forEach((value, i) => {
+    if (value < 0)
+      noteValue(series, i, measured === "level" ? "negative-level" : "negative-flow", below(series, i));
+    if (value === 0 && measured === "level") noteValue(series, i, "zero-level", zero(series, i));
+  });
+}
+
+function below(series: CheckedSeries, i: number): string {
+  const { state, values, measured } = series;
+  const why =
+    measured === "level"
+      ? "a receipt is missing or late, or a sign is turned"
+      : "a return, or a sign is turned";
+  return `${periodOf(series, i)}: ${state.column} ${values[i]}; ${why}.`;
+}
+
+function zero(series: CheckedSeries, i: number): string {
+  return `Row ${series.group.rows[i]}: level 0 has no logarithm; choose censored, count model, or exclude.`;
+}
