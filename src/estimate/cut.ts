@@ -9,15 +9,19 @@ export interface Cut {
   readonly firmCut: number;
 }
 
-/** sigma^2 and the critical values of a sum of squares, by the fit's convention. */
+/**
+ * sigma^2 and the critical values of a sum of squares, by the fit's convention. The chi-square cut is that of the
+ * likelihood with sigma^2 = RSS/n at every value: n ln(RSS(value)/RSS).
+ */
 export function cutOf(sumOfSquares: number, count: number, free: number, options: FitOptions): Cut {
   if (typeof options.spread === "object") return likelihoodCut(options);
-  if (options.cut === "chi-square") return { ...likelihoodCut(options), variance: sumOfSquares / count };
-  const [cut, firmCut] = levels(options).map((level) => fQuantile(level, 1, count - free)) as [
-    number,
-    number,
-  ];
-  return { variance: sumOfSquares / (count - free), cut, firmCut };
+  const left = count - free;
+  const critical = (level: number): number =>
+    options.cut === "chi-square"
+      ? left * Math.expm1(chiSquareQuantile(level, 1) / count)
+      : fQuantile(level, 1, left);
+  const [cut, firmCut] = levels(options).map(critical) as [number, number];
+  return { variance: sumOfSquares / left, cut, firmCut };
 }
 
 /** The critical values of twice a negative log-likelihood. */

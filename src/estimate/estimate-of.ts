@@ -1,4 +1,4 @@
-import { studentQuantile } from "../numeric/index.js";
+import { normalQuantile, studentQuantile } from "../numeric/index.js";
 import type { Rule } from "../rule/index.js";
 import { type Interval, waldInterval } from "./interval.js";
 import type { Optimum } from "./optimum.js";
@@ -23,16 +23,18 @@ export interface Estimate {
 /** How an unknown is reported: a spread is searched on the log scale, and reported on its own. */
 const natural = (role: UnknownRole, value: number): number => (role === "spread" ? Math.exp(value) : value);
 
-/** The estimates of an optimum, by unknown. */
+/** The estimates of an optimum, by unknown; Wald intervals by t where degrees of freedom are given, else normal. */
 export function estimatesOf(
   rule: Rule,
   unknowns: Unknowns,
   found: Optimum,
   level: number,
-  degreesOfFreedom: number,
+  degreesOfFreedom: number | undefined,
 ): readonly Estimate[] {
   const size = unknowns.names.length;
-  const student = studentQuantile((1 + level) / 2, degreesOfFreedom);
+  const tail = (1 + level) / 2;
+  const reach =
+    degreesOfFreedom === undefined ? normalQuantile(tail) : studentQuantile(tail, degreesOfFreedom);
   return unknowns.names.map((name, i) => {
     const role = unknowns.roles[i]!;
     const value = natural(role, found.at[i]!);
@@ -46,7 +48,7 @@ export function estimatesOf(
       value,
       standardError,
       profile: profile === undefined ? notComputed(level) : intervalOf(profile, role, level),
-      wald: waldInterval(value, standardError, student, level),
+      wald: waldInterval(value, standardError, reach, level),
       trace: (profile?.trace ?? []).map((at) => ({ ...at, value: natural(role, at.value) })),
     };
   });

@@ -1,10 +1,14 @@
 import type { Warning } from "../numeric/index.js";
 import type { Observations } from "../record/index.js";
 import type { Rule } from "../rule/index.js";
+import { conventionsOf } from "./conventions.js";
+import { fitGroup } from "./fit-group.js";
 import type { FitOptions } from "./fit-options.js";
-import { fitGroup, type GroupFit } from "./group-fit.js";
+import type { GroupFit } from "./group-fit.js";
 import { matchStates } from "./match-states.js";
 import { refuseMissingErrors } from "./refusals.js";
+
+const errorKinds: readonly unknown[] = ["process", "observation", "both"];
 
 /** A rule with its constants estimated from a record, each group on its own. */
 export interface Fit {
@@ -39,7 +43,7 @@ export interface Fit {
  * fit(crowding, counts, { errors: "observation" }).groups[0].stop.kind; // "converged"
  */
 export function fit(rule: Rule, observations: Observations, options: FitOptions): Fit {
-  if (options?.errors !== "process" && options?.errors !== "observation") throw refuseMissingErrors();
+  if (!errorKinds.includes(options?.errors)) throw refuseMissingErrors();
   const matched = matchStates(rule, observations);
   const groups = matched.groups.map((group) => fitGroup(rule, group, options));
   return Object.freeze({
@@ -49,20 +53,6 @@ export function fit(rule: Rule, observations: Observations, options: FitOptions)
     options: Object.freeze({ ...options }),
     groups: Object.freeze(groups),
     warnings: Object.freeze([...rule.findings]),
-    conventions: Object.freeze(conventionsOf(options)),
+    conventions: Object.freeze(conventionsOf(options, groups)),
   });
-}
-
-function conventionsOf(options: FitOptions): string[] {
-  const cut =
-    options.cut === "chi-square" ? "profile cut chi-square(1), sigma^2 = RSS/n" : "profile cut F(1, n - p)";
-  return [
-    options.errors === "observation"
-      ? "Error in the observation: whole trajectory fitted, initial state estimated unless given."
-      : "Error in the process: each step fitted from the recorded value before it.",
-    options.spread === "proportional"
-      ? "Spread proportional to the level: normal errors on the log scale."
-      : "Spread constant at every level: normal errors.",
-    `Standard errors by sigma^2 = RSS/(n - p); ${cut}; AICc by RSS/n on the fitting scale, counting sigma.`,
-  ];
 }

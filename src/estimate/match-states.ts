@@ -1,4 +1,4 @@
-import type { Observations } from "../record/index.js";
+import type { Observations, ObservedGroup } from "../record/index.js";
 import type { Rule } from "../rule/index.js";
 import { refuseUnmatchedStates } from "./refusals.js";
 
@@ -13,6 +13,16 @@ export function matchStates(rule: Rule, observations: Observations): Observation
   return {
     ...observations,
     states: [{ ...only, name: state }],
-    groups: observations.groups.map((group) => ({ ...group, values: { [state]: group.values[only.name]! } })),
+    groups: observations.groups.map((group) => renamed(group, only.name, state)),
+  };
+}
+
+function renamed(group: ObservedGroup, from: string, to: string): ObservedGroup {
+  const { values, censoring, replicates, ...rest } = group;
+  return {
+    ...rest,
+    values: { [to]: values[from]! },
+    ...(censoring?.[from] && { censoring: { [to]: censoring[from] } }),
+    ...(replicates?.[from] && { replicates: { [to]: replicates[from] } }),
   };
 }

@@ -7,7 +7,7 @@ export function refuseMissingErrors(): ModelError {
   return new ModelError(
     "errors-not-stated",
     'A fit states where it puts the error. Give { errors: "observation" } when the scatter lies in the reading, or ' +
-      '{ errors: "process" } when it lies in the change itself.',
+      '{ errors: "process" } when it lies in the change itself, { errors: "both" } when neither can be left out.',
   );
 }
 

@@ -1,0 +1,60 @@
+import type { FitOptions } from "./fit-options.js";
+import type { GroupFit } from "./group-fit.js";
+
+/** The conventions behind the numbers of a fit, a sentence each, printed with every table of it. */
+export function conventionsOf(options: FitOptions, groups: readonly GroupFit[]): readonly string[] {
+  const filter = groups.find((group) => group.filter !== undefined)?.filter;
+  return [
+    errorSentence(options),
+    ...(filter ? [filterSentence(filter)] : []),
+    spreadSentence(options),
+    intervalSentence(options, groups),
+    ...(options.factor === undefined
+      ? []
+      : ["The record reads a state up to a factor, which counts as an unknown."]),
+  ];
+}
+
+function errorSentence({ errors }: FitOptions): string {
+  if (errors === "observation")
+    return "Error in the observation: whole trajectory fitted, initial state estimated unless given.";
+  return errors === "process"
+    ? "Error in the process: each step fitted from the recorded value before it, over a gap by as many steps."
+    : "Error in both the process and the observation: likelihood of the readings by the Kalman filter.";
+}
+
+function filterSentence({ method, start }: NonNullable<GroupFit["filter"]>): string {
+  const filter =
+    method === "exact"
+      ? "The filter is exact, the rule being linear on the fitting scale"
+      : "The filter takes the rule's slope at the estimated state (extended)";
+  const first =
+    start === "stationary"
+      ? "the first reading is taken from the rule's long-run distribution (stationary start)"
+      : "the first reading is taken as read and left out of the likelihood (diffuse start)";
+  return `${filter}; ${first}.`;
+}
+
+function spreadSentence({ spread = "constant" }: FitOptions): string {
+  if (typeof spread === "object") return `Normal errors of the known standard deviation ${spread.sd}.`;
+  switch (spread) {
+    case "proportional":
+      return "Spread proportional to the level: normal errors on the log scale.";
+    case "constant":
+      return "Spread constant at every level: normal errors.";
+    case "poisson":
+      return "Counts: variance equal to the mean (Poisson).";
+    case "negative-binomial":
+      return "Counts: variance = mean + dispersion * mean^2 (negative binomial).";
+  }
+}
+
+function intervalSentence(options: FitOptions, groups: readonly GroupFit[]): string {
+  const spreads = groups.some((group) => group.estimates.some(({ role }) => role === "spread"));
+  const likelihood = spreads || options.spread === "poisson" || typeof options.spread === "object";
+  if (likelihood)
+    return "Standard errors by the curvature of the log-likelihood; profile cut chi-square(1); AICc counts every unknown.";
+  const cut =
+    options.cut === "chi-square" ? "profile cut chi-square(1), sigma^2 = RSS/n" : "profile cut F(1, n - p)";
+  return `Standard errors by sigma^2 = RSS/(n - p); ${cut}; AICc by RSS/n on the fitting scale, counting sigma.`;
+}

@@ -1,0 +1,12 @@
+/** What a state-space fit knows beside its estimates. */
+export interface Filtered {
+  /** Standard deviations of one step and of one reading, by state, on the fitting scale. */
+  readonly processError: Readonly<Record<string, number>>;
+  readonly observationError: Readonly<Record<string, number>>;
+  /** How the first value was taken: from the rule's long-run distribution, or as it was read. */
+  readonly start: "stationary" | "diffuse";
+  /** Exact where the rule is linear on the fitting scale; otherwise the rule's slope is taken at the estimated state. */
+  readonly method: "exact" | "extended";
+  /** State vector at the last recorded period, on the fitting scale: mean [slots] and covariance [slots, slots]. */
+  readonly last: { readonly mean: readonly number[]; readonly covariance: readonly number[] };
+}

@@ -1,0 +1,127 @@
+import type { ObservedGroup } from "../record/index.js";
+import type { Rule } from "../rule/index.js";
+import { criteriaOf } from "./criteria.js";
+import { likelihoodCut } from "./cut.js";
+import { describeFit } from "./describe-fit.js";
+import type { Filtered } from "./filtered.js";
+import type { FitOptions } from "./fit-options.js";
+import type { GroupFit } from "./group-fit.js";
+import { likelihoodObjective } from "./likelihood-objective.js";
+import { type Optimum, optimum } from "./optimum.js";
+import { prepared } from "./prepared.js";
+import { refuseNoStart } from "./refusals.js";
+import { startingPoints } from "./starting-points.js";
+import { type Beginning, type StateSpace, stateSpace } from "./state-space.js";
+import { place, type Unknowns, unknownsOf } from "./unknowns.js";
+
+/** Shares of the one-step scatter that the two errors are begun from: process, observation. */
+const splits = [
+  [0.9, 0.3],
+  [0.6, 0.5],
+  [0.3, 0.7],
+] as const;
+
+/** Standard deviations of the long run beyond which a first value does not pass for one of them. */
+const farOut = 3;
+
+/** Fits a rule with errors in its steps and in its readings, their shares found from the record. */
+export function stateSpaceFit(rule: Rule, group: ObservedGroup, options: FitOptions): GroupFit {
+  const steps: FitOptions = { ...options, errors: "process" };
+  if (typeof options.spread === "object") Object.assign(steps, { spread: "constant" });
+  const plain = unknownsOf(rule, steps);
+  const squares = prepared(rule, group, plain, steps);
+  const starts = startingPoints(rule, group, steps, plain, squares);
+  if (starts.length === 0) throw refuseNoStart(group, rule.text);
+  const unknowns = unknownsOf(rule, options, spreadNames(rule, options));
+  const begun = starts
+    .slice(0, 2)
+    .flatMap((start) => withSplits(start, squares.rows, unknowns, rule, options));
+  const attempt = (beginning: Beginning): GroupFit | undefined => {
+    const space = stateSpace(rule, group, unknowns, options, beginning);
+    const objective = likelihoodObjective(unknowns.names.length, space.minusTwice);
+    const usable = begun.filter((start) => Number.isFinite(space.minusTwice(start)));
+    if (usable.length === 0) return undefined;
+    const profiled = options.intervals !== "none";
+    const found = optimum(objective, unknowns, usable, () => likelihoodCut(options), profiled);
+    if (beginning === "stationary" && !beginsInLongRun(space, found)) return undefined;
+    return described(rule, group, options, unknowns, space, found, beginning);
+  };
+  const linear = stateSpace(rule, group, unknowns, options, "diffuse").isLinear(begun[0]!);
+  const fitted = (linear ? attempt("stationary") : undefined) ?? attempt("diffuse");
+  if (fitted === undefined) throw refuseNoStart(group, rule.text);
+  return fitted;
+}
+
+function spreadNames(rule: Rule, options: FitOptions): readonly string[] {
+  const named = (what: string, state: string): string =>
+    rule.states.length === 1 ? what : `${what} of ${state}`;
+  const process = rule.states.map((state) => named("process error", state));
+  const known = typeof options.spread === "object";
+  return [...process, ...(known ? [] : rule.states.map((state) => named("observation error", state)))];
+}
+
+function withSplits(
+  start: Float64Array,
+  rows: { prepare(at: Float64Array, needRows: boolean): void; residualAt(i: number): number; count: number },
+  unknowns: Unknowns,
+  rule: Rule,
+  options: FitOptions,
+): Float64Array[] {
+  rows.prepare(start, false);
+  let squares = 0;
+  for (let i = 0; i < rows.count; i++) squares += rows.residualAt(i) ** 2;
+  const scatter = Math.sqrt(squares / rows.count);
+  return splits.map(([process, observation]) => {
+    const whole = new Float64Array(unknowns.names.length);
+    whole.set(start);
+    const first = unknowns.names.length - unknowns.spreads.length;
+    const known = typeof options.spread === "object";
+    for (let k = 0; k < unknowns.spreads.length; k++) {
+      const share = known || k < rule.states.length ? process : observation;
+      whole[first + k] = Math.log(share * scatter);
+    }
+    return whole;
+  });
+}
+
+/** Whether the first reading passes for one from the long run at the estimates. */
+function beginsInLongRun(space: StateSpace, found: Optimum): boolean {
+  space.rows.prepare(found.at, false);
+  const first = Math.abs(space.rows.residualAt(0));
+  let squares = 0;
+  for (let i = 0; i < space.rows.count; i++) squares += space.rows.residualAt(i) ** 2;
+  return first <= farOut * Math.max(space.longRunSd(found.at), Math.sqrt(squares / space.rows.count));
+}
+
+function described(
+  rule: Rule,
+  group: ObservedGroup,
+  options: FitOptions,
+  unknowns: Unknowns,
+  space: StateSpace,
+  found: Optimum,
+  beginning: Beginning,
+): GroupFit {
+  const { rows } = space;
+  const fitted = describeFit(rule, group, options, unknowns, rows, found, {
+    criteria: criteriaOf(-0.5 * found.value, rows.count, unknowns.names.length),
+    sigma: undefined,
+    exact: false,
+  });
+  space.minusTwice(found.at);
+  place(unknowns, found.at);
+  const states = rule.states.length;
+  const known = typeof options.spread === "object" ? options.spread.sd : undefined;
+  const spread = (first: number): Record<string, number> =>
+    Object.fromEntries(
+      rule.states.map((state, s) => [state, unknowns.spreads[first + s] ?? known ?? Number.NaN]),
+    );
+  const filter: Filtered = {
+    processError: spread(0),
+    observationError: spread(states),
+    start: beginning,
+    method: space.isLinear(found.at) ? "exact" : "extended",
+    last: { mean: Array.from(space.belief.mean), covariance: Array.from(space.belief.covariance) },
+  };
+  return Object.freeze({ ...fitted, filter: Object.freeze(filter) });
+}
