@@ -12,7 +12,14 @@ export {
 export type { Check, CheckOptions, Comparison } from "../src/evidence/index.js";
 export { leastSquares, ModelError } from "../src/numeric/index.js";
 export type { Forecast, ForecastOptions } from "../src/projection/index.js";
-export type { Finding, Observations } from "../src/record/index.js";
+export type {
+  DifferenceOptions,
+  Differences,
+  Finding,
+  ObservationOptions,
+  Observations,
+} from "../src/record/index.js";
+export type { ReadOptions, WriteOptions } from "../src/store/index.js";
 export { answer, type CaseOptions, closeCase, openCase } from "./commands/case.js";
 export type { Domain } from "./commands/cautions.js";
 export { check } from "./commands/checks.js";
@@ -21,9 +28,15 @@ export { reaches } from "./commands/decisions.js";
 export { type Explanation, explain } from "./commands/explain.js";
 export { fit } from "./commands/fits.js";
 export { forecast } from "./commands/projections.js";
-export { differences, observations, readRecord } from "./commands/records.js";
+export {
+  differences,
+  observations,
+  readRecord,
+  writeRecord,
+} from "./commands/records.js";
 export { type RecurrenceOptions, type Rule, recurrence } from "./commands/rules.js";
 export { show } from "./commands/show.js";
+export { frame, type RecordLike, sourceOf } from "./dataframe/index.js";
 export { type Figure, type FigureOptions, figure } from "./figures/index.js";
 export type { Term } from "./glossary/index.js";
 export { type Table, type TableOptions, table } from "./tables/index.js";
