@@ -1,4 +1,4 @@
-import type { Decision } from "./decision.js";
+import type { Decision } from "./decisions/decision.js";
 import type { Finding } from "./finding.js";
 
 /** How far apart recorded periods lie: `{ every: 12, of: "hour" }` is one step of twelve hours. */

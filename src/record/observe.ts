@@ -2,15 +2,16 @@ import { checkIdentities } from "./checks/check-identities.js";
 import { checkValues } from "./checks/check-values.js";
 import { refuseMixedUnits } from "./checks/refuse-mixed-units.js";
 import { type ColumnTable, columnNamed, rowCount } from "./column-table.js";
+import { decided, rowsLeftOut } from "./decisions/correct.js";
 import { type FindingLog, findingLog } from "./finding-log.js";
-import { groupRows } from "./group-rows.js";
-import { noteSteps } from "./note-steps.js";
 import type { ObservationOptions } from "./observation-options.js";
 import type { Observations, ObservedGroup } from "./observations.js";
-import { observedGroup } from "./observed-group.js";
-import { type PeriodAxis, periodAxis } from "./period-axis.js";
+import { noteSteps } from "./period/note-steps.js";
+import { type PeriodAxis, periodAxis } from "./period/period-axis.js";
 import { inputsOf, readColumns } from "./read-columns.js";
 import { noDataRows, noUsableRows, optionMissing } from "./refusals.js";
+import { groupRows } from "./series/group-rows.js";
+import { observedGroup } from "./series/observed-group.js";
 
 /**
  * Makes a record ready for rules: values by whole steps for each series, with all that was found on the way.
@@ -21,8 +22,8 @@ import { noDataRows, noUsableRows, optionMissing } from "./refusals.js";
  *
  * @param table - the record as columns of equal length, m rows.
  * @param options - which columns hold what, and the length of one step; see {@link ObservationOptions}.
- * @returns groups in the order of their first rows, findings, and counts of rows read, used, flagged,
- *   corrected and refused.
+ * @returns groups in the order of their first rows, findings, and counts of rows: read (those that meet
+ *   `where`), used, flagged, corrected and refused (left out).
  * @throws {ModelError} `no-data-rows` | `mixed-units` | `identity-unread` | `no-usable-rows` | `option-missing` | `option-wrong` | `missing-column` |
  *   `doubled-column` | `not-a-number` | `decimal-sign-unclear` | `step-missing` | `no-period` |
  *   `ambiguous-date` | `no-such-period` | `off-step` | `not-increasing` | `duplicate-period`.
@@ -37,36 +38,33 @@ export function observations(table: ColumnTable, options: ObservationOptions): O
   if (options?.period === undefined)
     throw optionMissing("period", 'Name the period column: period: "month".');
   const log = findingLog();
-  const columns = readColumns(table, options);
-  const axis = periodAxis(table, options.period, options.step);
+  noteDecisions(table, log);
+  const used = decided(table);
+  const columns = readColumns(used, options);
+  const axis = periodAxis(used, options.period, options.step);
   const by = typeof options.by === "string" ? [options.by] : (options.by ?? []);
-  const rows = groupRows(table, by, rowsWhere(table, options.where, read), log);
-  refuseMixedUnits(table, rows);
-  const groups = rows.map((group) => observedGroup(group, columns, axis, table, options, log));
+  const taken = rowsWhere(used, options.where);
+  const out = rowsLeftOut(used);
+  const rows = groupRows(used, by, out.size === 0 ? taken : taken.filter((row) => !out.has(row)), log);
+  refuseMixedUnits(used, rows);
+  const groups = rows.map((group) => observedGroup(group, columns, axis, used, options, log));
   const kept = groups.filter(({ group }) => group.index.length > 0).map(({ group }) => group);
-  if (kept.length === 0) throw noUsableRows(read);
+  if (kept.length === 0) throw noUsableRows(taken.length);
   noteSteps(kept, axis, log);
-  if (options.identities !== undefined)
+  const { identities, measured = "level" } = options;
+  if (identities)
     checkIdentities(
-      table,
-      options.identities,
+      used,
+      identities,
       rows.map((group) => byPeriod(group.rows, axis)),
       log,
     );
-  const { measured = "level" } = options;
   for (const group of kept) {
     for (const state of columns.states)
       checkValues({ group, state, values: group.values[state.name]!, measured, period: axis.column, log });
   }
-  return assemble(
-    kept,
-    columns.states,
-    axis,
-    options,
-    log,
-    read,
-    groups.reduce((n, g) => n + g.merged, 0),
-  );
+  const standing = groups.reduce((sum, { used }) => sum + used, 0);
+  return assemble(kept, columns.states, axis, options, log, { read: taken.length, used: standing });
 }
 
 /** Rows by increasing period; of one period in the record's order. */
@@ -74,14 +72,34 @@ function byPeriod(rows: Int32Array, { position }: PeriodAxis): Int32Array {
   return rows.slice().sort((a, b) => position[a]! - position[b]! || a - b);
 }
 
-function rowsWhere(table: ColumnTable, where: ObservationOptions["where"], read: number): Int32Array {
-  const all = Int32Array.from({ length: read }, (_, row) => row);
-  if (where === undefined) return all;
+function rowsWhere(table: ColumnTable, where: ObservationOptions["where"] = {}): Int32Array {
+  const all = Int32Array.from({ length: rowCount(table) }, (_, row) => row);
   const wanted = Object.entries(where).map(([name, cell]) => ({
     column: columnNamed(table, name, "a condition"),
     cell: String(cell),
   }));
+  if (wanted.length === 0) return all;
   return all.filter((row) => wanted.every(({ column, cell }) => String(column[row]) === cell));
+}
+
+function noteDecisions({ decisions = [] }: ColumnTable, log: FindingLog): void {
+  for (const decision of decisions) {
+    const { row, column, was, now, why, who } = decision;
+    const what =
+      column === ""
+        ? `Row ${row} is left out`
+        : `Row ${row}, ${column}: ${now ?? "nothing"} is used instead of ${was ?? "nothing"}`;
+    const by = who === "" ? "" : ` (${who})`;
+    log.note({
+      kind: "corrected",
+      row,
+      column,
+      value: String(was ?? ""),
+      message: `${what}: ${why}${by}.`,
+      done: "as decided",
+    });
+    log.decide(decision);
+  }
 }
 
 function assemble(
@@ -90,11 +108,10 @@ function assemble(
   axis: PeriodAxis,
   options: ObservationOptions,
   log: FindingLog,
-  read: number,
-  merged: number,
+  { read, used }: { readonly read: number; readonly used: number },
 ): Observations {
-  const used = groups.reduce((sum, group) => sum + group.rows.length, 0);
   const { step, name } = axis.calendar;
+  const decisions = log.decisions();
   return Object.freeze({
     kind: "observations",
     groups: Object.freeze(groups),
@@ -105,12 +122,13 @@ function assemble(
     measured: options.measured ?? "level",
     order: options.order ?? "",
     findings: log.all(),
+    ...(decisions.length > 0 && { decisions }),
     counts: Object.freeze({
       read,
       used,
       flagged: log.flagged(),
-      corrected: merged,
-      refused: read - used - merged,
+      corrected: new Set(decisions.map(({ row }) => row)).size,
+      refused: read - used,
     }),
   });
 }
