@@ -11,7 +11,7 @@ import { type Optimum, optimum } from "./optimum.js";
 import { prepared } from "./prepared.js";
 import { refuseNoStart } from "./refusals.js";
 import { startingPoints } from "./starting-points.js";
-import { type Beginning, type StateSpace, stateSpace } from "./state-space.js";
+import { type Filtering, isLinearOnScale, type StateSpace, stateSpace } from "./state-space.js";
 import { place, type Unknowns, unknownsOf } from "./unknowns.js";
 
 /** Shares of the one-step scatter that the two errors are begun from: process, observation. */
@@ -36,18 +36,24 @@ export function stateSpaceFit(rule: Rule, group: ObservedGroup, options: FitOpti
   const begun = starts
     .slice(0, 2)
     .flatMap((start) => withSplits(start, squares.rows, unknowns, rule, options));
-  const attempt = (beginning: Beginning): GroupFit | undefined => {
-    const space = stateSpace(rule, group, unknowns, options, beginning);
+  const method = isLinearOnScale(rule, group, unknowns, options, begun[0]!) ? "exact" : "extended";
+  const attempt = (start: Filtering["start"]): GroupFit | undefined => {
+    const filtering = { start, method } as const;
+    const space = stateSpace(rule, group, unknowns, options, filtering);
     const objective = likelihoodObjective(unknowns.names.length, space.minusTwice);
-    const usable = begun.filter((start) => Number.isFinite(space.minusTwice(start)));
+    const usable = begun.filter((at) => Number.isFinite(space.minusTwice(at)));
     if (usable.length === 0) return undefined;
-    const profiled = options.intervals !== "none";
-    const found = optimum(objective, unknowns, usable, () => likelihoodCut(options), profiled);
-    if (beginning === "stationary" && !beginsInLongRun(space, found)) return undefined;
-    return described(rule, group, options, unknowns, space, found, beginning);
+    const found = optimum(
+      objective,
+      unknowns,
+      usable,
+      () => likelihoodCut(options),
+      options.intervals !== "none",
+    );
+    if (start === "stationary" && !beginsInLongRun(space, found)) return undefined;
+    return described(rule, group, options, unknowns, space, found, filtering);
   };
-  const linear = stateSpace(rule, group, unknowns, options, "diffuse").isLinear(begun[0]!);
-  const fitted = (linear ? attempt("stationary") : undefined) ?? attempt("diffuse");
+  const fitted = (method === "exact" ? attempt("stationary") : undefined) ?? attempt("diffuse");
   if (fitted === undefined) throw refuseNoStart(group, rule.text);
   return fitted;
 }
@@ -100,7 +106,7 @@ function described(
   unknowns: Unknowns,
   space: StateSpace,
   found: Optimum,
-  beginning: Beginning,
+  filtering: Filtering,
 ): GroupFit {
   const { rows } = space;
   const fitted = describeFit(rule, group, options, unknowns, rows, found, {
@@ -119,8 +125,7 @@ function described(
   const filter: Filtered = {
     processError: spread(0),
     observationError: spread(states),
-    start: beginning,
-    method: space.isLinear(found.at) ? "exact" : "extended",
+    ...filtering,
     last: { mean: Array.from(space.belief.mean), covariance: Array.from(space.belief.covariance) },
   };
   return Object.freeze({ ...fitted, filter: Object.freeze(filter) });

@@ -4,9 +4,11 @@ import { type FitOptions, onLogScale } from "./fit-options.js";
 import type { FitRows } from "./fit-rows.js";
 import { inputsByPeriod } from "./inputs-by-period.js";
 import { type Belief, type Dynamics, predict, scratch, takeIn } from "./kalman-step.js";
-import { longestLag, slotsOf } from "./slots.js";
+import { type LinearRule, linearFilter, longRun } from "./linear-filter.js";
+import { predictionRows } from "./prediction-rows.js";
+import { type Readings, readingsOf } from "./readings.js";
+import { slotsOf } from "./slots.js";
 import { place, type Unknowns } from "./unknowns.js";
-import { rootWeight, valueTable } from "./value-table.js";
 
 /** A group seen through a rule with errors in its steps and in its readings. */
 export interface StateSpace {
@@ -16,14 +18,15 @@ export interface StateSpace {
   readonly rows: FitRows;
   /** The belief after the last reading of the last evaluation. */
   readonly belief: Belief;
-  /** Whether one step is linear in the state on the fitting scale, at the unknowns placed last. */
-  readonly isLinear: (at: Float64Array) => boolean;
-  /** Standard deviation of a reading in the long run of a stable linear rule with one state. */
+  /** Standard deviation of a reading in the long run; NaN where there is none. */
   readonly longRunSd: (at: Float64Array) => number;
 }
 
-/** How the first reading is taken. */
-export type Beginning = "stationary" | "diffuse";
+/** How the first reading is taken, and whether the rule is linear, so that the filter is exact. */
+export interface Filtering {
+  readonly start: "stationary" | "diffuse";
+  readonly method: "exact" | "extended";
+}
 
 /**
  * The likelihood of a group by the Kalman filter, on the scale of the spread: state moved by the rule with process
@@ -41,39 +44,41 @@ export function stateSpace(
   group: ObservedGroup,
   unknowns: Unknowns,
   options: FitOptions,
-  beginning: Beginning,
+  { start, method }: Filtering,
 ): StateSpace {
+  const dynamics = dynamicsOf(rule, group, options);
   const slots = slotsOf(rule).length;
-  const states = rule.states.length;
-  const log = onLogScale(options);
-  const dynamics: Dynamics = {
-    compiled: compileRule(rule),
-    inputs: inputsByPeriod(rule, group),
-    log,
-    states,
-    ...scratch(slots, rule.constants.length),
-  };
   const belief: Belief = { mean: new Float64Array(slots), covariance: new Float64Array(slots * slots) };
-  const { constants, spreads } = unknowns;
-  const known = typeof options.spread === "object" ? options.spread.sd : undefined;
-  const processVariance = new Float64Array(states);
-  const readingSd = (s: number): number => known ?? spreads[states + s]!;
   const readings = readingsOf(rule, group, options);
-  const begin = beginning === "stationary" ? beginStationary : beginDiffuse;
-  const run = (at: Float64Array, predicted?: Float64Array): number => {
+  const { constants, spreads } = unknowns;
+  const variance = new Float64Array(rule.states.length);
+  const known = typeof options.spread === "object" ? options.spread.sd : undefined;
+  const readingVariance = (s: number): number => (known ?? spreads[rule.states.length + s]!) ** 2;
+  const from = start === "diffuse" ? readings.skipped : 0;
+
+  const setDown = (at: Float64Array): void => {
     place(unknowns, at);
-    for (let s = 0; s < states; s++) processVariance[s] = spreads[s]! ** 2;
-    let period = readings.first;
-    if (!begin(belief, dynamics, constants, processVariance, readings, readingSd)) return Number.NaN;
-    let sum = 0;
-    for (let i = beginning === "diffuse" ? readings.skipped : 0; i < readings.count; i++) {
-      for (; period < readings.periods[i]!; period++)
-        predict(belief, dynamics, constants, period, processVariance);
-      const s = readings.states[i]!;
-      if (predicted) predicted[i] = belief.mean[s]!;
-      sum += takeIn(belief, dynamics, s, readings.values[i]!, (readingSd(s) / readings.roots[i]!) ** 2);
-    }
+    for (let s = 0; s < variance.length; s++) variance[s] = spreads[s]! ** 2;
+  };
+  const exact = (predicted?: Float64Array): number => {
+    const linear = linearAt(dynamics, constants, readings, variance[0]!, readingVariance(0));
+    const first =
+      start === "stationary"
+        ? longRun(linear)
+        : { mean: readings.beginning[0]!, variance: linear.readingVariance };
+    if (first === undefined) return Number.NaN;
+    const sum = linearFilter(linear, readings, from, first, predicted);
+    belief.mean[0] = first.mean;
+    belief.covariance[0] = first.variance;
     return sum;
+  };
+  const extended = (predicted?: Float64Array): number => {
+    beginAsRead(belief, readings, readingVariance, rule.states.length);
+    return extendedFilter(belief, dynamics, constants, readings, from, variance, readingVariance, predicted);
+  };
+  const run = (at: Float64Array, predicted?: Float64Array): number => {
+    setDown(at);
+    return method === "exact" ? exact(predicted) : extended(predicted);
   };
   return {
     belief,
@@ -81,152 +86,95 @@ export function stateSpace(
       const sum = run(at);
       return Number.isFinite(sum) ? -2 * sum : Number.POSITIVE_INFINITY;
     },
-    isLinear(at) {
-      place(unknowns, at);
-      return !readsPeriod(rule) && slots === 1 && isLinear(dynamics, constants, readings);
-    },
     longRunSd(at) {
-      place(unknowns, at);
-      processVariance[0] = spreads[0]! ** 2;
-      const stable = beginStationary(belief, dynamics, constants, processVariance, readings, readingSd);
-      return stable ? Math.sqrt(belief.covariance[0]! + readingSd(0) ** 2) : Number.NaN;
+      setDown(at);
+      const linear = linearAt(dynamics, constants, readings, variance[0]!, readingVariance(0));
+      return Math.sqrt((longRun(linear)?.variance ?? Number.NaN) + readingVariance(0));
     },
-    rows: predictionRows(
-      readings,
-      states,
-      unknowns.names.length,
-      beginning === "diffuse" ? readings.skipped : 0,
-      log,
-      run,
-    ),
+    rows: predictionRows(readings, unknowns.names.length, from, dynamics.log, run),
   };
 }
 
-interface Readings {
-  readonly count: number;
-  readonly periods: Int32Array;
-  readonly entries: Int32Array;
-  readonly states: Int32Array;
-  /** On the fitting scale. */
-  readonly values: Float64Array;
-  readonly observed: Float64Array;
-  readonly roots: Float64Array;
-  /** Period at which the filter begins, and how many readings lie there. */
-  readonly first: number;
-  readonly skipped: number;
-  /** [slots], on the fitting scale: the state vector as read where the filter begins. */
-  readonly beginning: Float64Array;
-}
-
-function readingsOf(rule: Rule, group: ObservedGroup, options: FitOptions): Readings {
-  const states = rule.states.length;
-  const log = onLogScale(options);
-  const table = valueTable(rule, group).map((value) => (log ? Math.log(value) : value));
-  const first = longestLag(rule);
-  const cells: { entry: number; state: number; value: number }[] = [];
-  for (let k = 0; k < table.length; k++) {
-    const entry = Math.floor(k / states);
-    if (!Number.isNaN(table[k]!) && group.index[entry]! >= first)
-      cells.push({ entry, state: k % states, value: table[k]! });
-  }
-  const nearest = (state: string, period: number): number => {
-    const entry = Math.max(
-      0,
-      group.index.findIndex((index) => index >= period),
-    );
-    const value = group.values[state]![entry]!;
-    return log ? Math.log(value) : value;
-  };
-  return {
-    count: cells.length,
-    periods: Int32Array.from(cells, ({ entry }) => group.index[entry]!),
-    entries: Int32Array.from(cells, ({ entry }) => entry),
-    states: Int32Array.from(cells, ({ state }) => state),
-    values: Float64Array.from(cells, ({ value }) => value),
-    observed: Float64Array.from(cells, ({ value }) => (log ? Math.exp(value) : value)),
-    roots: Float64Array.from(cells, ({ entry, state }) =>
-      rootWeight(group, rule.states[state]!, entry, undefined),
-    ),
-    first,
-    skipped: cells.filter(({ entry }) => group.index[entry] === first).length,
-    beginning: Float64Array.from(slotsOf(rule), ({ state, lag }) => nearest(state, first - lag)),
-  };
-}
-
-type Begin = (
-  belief: Belief,
-  dynamics: Dynamics,
-  constants: Float64Array,
-  processVariance: Float64Array,
-  readings: Readings,
-  readingSd: (state: number) => number,
-) => boolean;
-
-const beginDiffuse: Begin = (belief, dynamics, _constants, _variance, { beginning }, readingSd) => {
-  const slots = beginning.length;
-  belief.mean.set(beginning);
-  belief.covariance.fill(0);
-  for (let i = 0; i < slots; i++) belief.covariance[i * slots + i] = readingSd(i % dynamics.states) ** 2;
-  return true;
-};
-
-/** Mean a / (1 - b) and variance q / (1 - b^2) of u' = a + b u + e; false where |b| is not below 1. */
-const beginStationary: Begin = (belief, dynamics, constants, processVariance, { beginning }) => {
-  belief.mean.set(beginning);
-  belief.covariance.fill(0);
-  belief.covariance[0] = 1;
-  predict(belief, dynamics, constants, 0, new Float64Array(1));
-  const slope = dynamics.slopes[0]!;
-  if (!(Math.abs(slope) < 1)) return false;
-  belief.mean[0] = (belief.mean[0]! - slope * beginning[0]!) / (1 - slope);
-  belief.covariance[0] = processVariance[0]! / (1 - slope * slope);
-  return Number.isFinite(belief.mean[0]!);
-};
-
-function isLinear(dynamics: Dynamics, constants: Float64Array, { values }: Readings): boolean {
+/** Whether a rule of one state, the same in every period, is linear on the fitting scale at constants set down. */
+export function isLinearOnScale(
+  rule: Rule,
+  group: ObservedGroup,
+  unknowns: Unknowns,
+  options: FitOptions,
+  at: Float64Array,
+): boolean {
+  if (slotsOf(rule).length !== 1 || rule.inputs.length > 0 || readsPeriod(rule)) return false;
+  place(unknowns, at);
+  const dynamics = dynamicsOf(rule, group, options);
+  const { values } = readingsOf(rule, group, options);
   const low = Math.min(...values);
   const high = Math.max(...values);
-  const slopes = [low, (low + high) / 2, high].map((at) => {
-    const belief = { mean: Float64Array.of(at), covariance: Float64Array.of(0) };
-    predict(belief, dynamics, constants, 0, new Float64Array(1));
+  const slopes = [low, (low + high) / 2, high].map((mean) => {
+    predict(
+      { mean: Float64Array.of(mean), covariance: new Float64Array(1) },
+      dynamics,
+      unknowns.constants,
+      0,
+      new Float64Array(1),
+    );
     return dynamics.slopes[0]!;
   });
   return slopes.every((slope) => Math.abs(slope - slopes[0]!) <= 1e-9 * Math.max(1, Math.abs(slopes[0]!)));
 }
 
-function predictionRows(
-  readings: Readings,
-  states: number,
-  size: number,
-  skipped: number,
-  log: boolean,
-  run: (at: Float64Array, predicted: Float64Array) => number,
-): FitRows {
-  const predicted = new Float64Array(readings.count);
-  let fitted = 0;
+function dynamicsOf(rule: Rule, group: ObservedGroup, options: FitOptions): Dynamics {
   return {
-    size,
-    count: readings.count - skipped,
-    row: new Float64Array(size).fill(Number.NaN),
-    entries: readings.entries.subarray(skipped),
-    states: readings.states.subarray(skipped),
-    observed: readings.observed.subarray(skipped),
-    roots: readings.roots.subarray(skipped),
-    prepare(at) {
-      run(at, predicted);
-    },
-    residualAt(i) {
-      const mean = predicted[i + skipped]!;
-      fitted = log ? Math.exp(mean) : mean;
-      return readings.roots[i + skipped]! * (readings.values[i + skipped]! - mean);
-    },
-    fitted: () => fitted,
-    take(values) {
-      for (let i = 0; i < readings.count; i++) {
-        const value = values[readings.entries[i]! * states + readings.states[i]!]!;
-        readings.observed[i] = value;
-        readings.values[i] = log ? Math.log(value) : value;
-      }
-    },
+    compiled: compileRule(rule),
+    inputs: inputsByPeriod(rule, group),
+    log: onLogScale(options),
+    states: rule.states.length,
+    ...scratch(slotsOf(rule).length, rule.constants.length),
   };
+}
+
+/** A linear rule read off from one step. */
+function linearAt(
+  dynamics: Dynamics,
+  constants: Float64Array,
+  { beginning }: Readings,
+  processVariance: number,
+  readingVariance: number,
+): LinearRule {
+  const belief = { mean: Float64Array.of(beginning[0]!), covariance: new Float64Array(1) };
+  predict(belief, dynamics, constants, 0, new Float64Array(1));
+  const slope = dynamics.slopes[0]!;
+  return { slope, intercept: belief.mean[0]! - slope * beginning[0]!, processVariance, readingVariance };
+}
+
+function beginAsRead(
+  belief: Belief,
+  { beginning }: Readings,
+  readingVariance: (state: number) => number,
+  states: number,
+): void {
+  const slots = beginning.length;
+  belief.mean.set(beginning);
+  belief.covariance.fill(0);
+  for (let i = 0; i < slots; i++) belief.covariance[i * slots + i] = readingVariance(i % states);
+}
+
+function extendedFilter(
+  belief: Belief,
+  dynamics: Dynamics,
+  constants: Float64Array,
+  readings: Readings,
+  from: number,
+  variance: Float64Array,
+  readingVariance: (state: number) => number,
+  predicted: Float64Array | undefined,
+): number {
+  let period = readings.first;
+  let sum = 0;
+  for (let i = from; i < readings.count; i++) {
+    for (; period < readings.periods[i]!; period++) predict(belief, dynamics, constants, period, variance);
+    const s = readings.states[i]!;
+    if (predicted) predicted[i] = belief.mean[s]!;
+    sum += takeIn(belief, dynamics, s, readings.values[i]!, readingVariance(s) / readings.roots[i]! ** 2);
+  }
+  return sum;
 }
