@@ -1,5 +1,5 @@
 import { nearestNames } from "../numeric/index.js";
-import type { Decision } from "./decision.js";
+import type { Decision } from "./decisions/decision.js";
 import { doubledColumn, missingColumn, unevenColumns } from "./refusals.js";
 
 /** One column of a record: any cells, or numbers with NaN where a cell is empty. */

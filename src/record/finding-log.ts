@@ -1,8 +1,12 @@
+import type { Decision } from "./decisions/decision.js";
 import type { Finding } from "./finding.js";
 
 /** Collects what is found. Of one kind a hundred are kept in full; the rest are counted in a last line. */
 export interface FindingLog {
   note(finding: Finding): void;
+  /** A correction made because the analyst chose it. */
+  decide(decision: Decision): void;
+  decisions(): readonly Decision[];
   /** Rows that any finding names, kept or only counted. */
   flagged(): number;
   all(): readonly Finding[];
@@ -14,7 +18,12 @@ export function findingLog(): FindingLog {
   const kept: Finding[] = [];
   const counts = new Map<string, number>();
   const rows = new Set<number>();
+  const decisions: Decision[] = [];
   return {
+    decide: (decision) => {
+      decisions.push(Object.freeze(decision));
+    },
+    decisions: () => Object.freeze(decisions),
     note(finding) {
       if (finding.row !== undefined) rows.add(finding.row);
       const count = (counts.get(finding.kind) ?? 0) + 1;

@@ -1,4 +1,3 @@
-export type { CalendarName } from "./calendar.js";
 export {
   type Column,
   type ColumnTable,
@@ -8,9 +7,10 @@ export {
   rowCount,
   tableOf,
 } from "./column-table.js";
-export type { Decision } from "./decision.js";
-export type { DifferenceSeries } from "./difference-series.js";
-export { type DifferenceOptions, type Differences, differences } from "./differences.js";
+export { type Correction, correct, decided, undo } from "./decisions/correct.js";
+export type { Decision } from "./decisions/decision.js";
+export type { DifferenceSeries } from "./differences/difference-series.js";
+export { type DifferenceOptions, type Differences, differences } from "./differences/differences.js";
 export type { Finding } from "./finding.js";
 export type { CensoringLimits, DuplicateChoice, ObservationOptions } from "./observation-options.js";
 export type {
@@ -21,4 +21,5 @@ export type {
   StepLength,
 } from "./observations.js";
 export { observations } from "./observe.js";
+export type { CalendarName } from "./period/calendar.js";
 export { packed, tableOfRows } from "./table-of-rows.js";

@@ -1,5 +1,5 @@
-import type { CalendarName } from "./calendar.js";
 import type { StepLength } from "./observations.js";
+import type { CalendarName } from "./period/calendar.js";
 
 /** What to do where a series has two rows of one period; none is dropped unless the analyst says so. */
 export type DuplicateChoice = "refuse" | "average" | "sum" | "first" | "last";

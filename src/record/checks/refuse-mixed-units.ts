@@ -1,6 +1,6 @@
 import { type ColumnTable, isEmpty } from "../column-table.js";
-import type { RowGroup } from "../group-rows.js";
-import { mixedUnits } from "../refusals.js";
+import type { RowGroup } from "../series/group-rows.js";
+import { mixedUnits } from "./refusals.js";
 
 const unitColumn = /^(unit|units|currency)$/i;
 

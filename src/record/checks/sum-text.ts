@@ -1,5 +1,5 @@
 import { nearestNames } from "../../numeric/index.js";
-import { identityUnread } from "../refusals.js";
+import { identityUnread } from "./refusals.js";
 
 /** One term of a sum: a column at the row or at the one before it, or a number. */
 export interface SumTerm {

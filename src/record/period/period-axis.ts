@@ -1,9 +1,10 @@
+import { type Column, type ColumnTable, columnNamed, isEmpty } from "../column-table.js";
+import { numberColumn } from "../number-column.js";
+import type { StepLength } from "../observations.js";
+import { optionWrong } from "../refusals.js";
 import { type Calendar, type CalendarName, calendarNamed, calendarNames, everyUnit } from "./calendar.js";
 import { type Moment, momentOf } from "./calendar-date.js";
-import { type Column, type ColumnTable, columnNamed, isEmpty } from "./column-table.js";
-import { numberColumn } from "./number-column.js";
-import type { StepLength } from "./observations.js";
-import { ambiguousDate, noPeriod, noSuchPeriod, optionWrong, stepMissing } from "./refusals.js";
+import { ambiguousDate, noPeriod, noSuchPeriod, stepMissing } from "./refusals.js";
 
 /** Where the rows of a record lie on its axis of periods. */
 export interface PeriodAxis {

@@ -1,6 +1,6 @@
-import type { FindingLog } from "./finding-log.js";
+import type { FindingLog } from "../finding-log.js";
+import type { PeriodAxis } from "../period/period-axis.js";
 import type { RowGroup } from "./group-rows.js";
-import type { PeriodAxis } from "./period-axis.js";
 import { notIncreasing } from "./refusals.js";
 
 /**

@@ -1,5 +1,5 @@
+import type { StepLength } from "../observations.js";
 import { dayLength, type Moment, mondayBefore, mondayOf, monthNumber } from "./calendar-date.js";
-import type { StepLength } from "./observations.js";
 
 /** A way of counting periods: by name, or a number of units of time. */
 export type CalendarName =

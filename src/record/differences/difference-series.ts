@@ -1,5 +1,5 @@
-import type { Warning } from "../numeric/index.js";
-import type { ObservedGroup, ObservedState } from "./observations.js";
+import type { Warning } from "../../numeric/index.js";
+import type { ObservedGroup, ObservedState } from "../observations.js";
 import { noLogarithm } from "./refusals.js";
 
 /** The pairs of one state of one series. All arrays have one entry a pair, in order of the later row. */

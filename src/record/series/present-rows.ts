@@ -1,6 +1,6 @@
-import type { FindingLog } from "./finding-log.js";
-import type { PeriodAxis } from "./period-axis.js";
-import type { ReadColumns } from "./read-columns.js";
+import type { FindingLog } from "../finding-log.js";
+import type { PeriodAxis } from "../period/period-axis.js";
+import type { ReadColumns } from "../read-columns.js";
 
 /** The rows in which every state has a value. The others are left out and named: missing is not zero. */
 export function presentRows(

@@ -1,16 +1,16 @@
-import type { FindingLog } from "./finding-log.js";
-import type { DuplicateChoice } from "./observation-options.js";
-import type { ReplicateSpread } from "./observations.js";
-import type { PeriodAxis } from "./period-axis.js";
-import type { ReadColumns } from "./read-columns.js";
+import type { FindingLog } from "../finding-log.js";
+import type { DuplicateChoice } from "../observation-options.js";
+import type { ReplicateSpread } from "../observations.js";
+import type { PeriodAxis } from "../period/period-axis.js";
+import type { ReadColumns } from "../read-columns.js";
 import { duplicatePeriod } from "./refusals.js";
 
 /** Rows of a series with one row a period, and how a column is carried over to them. */
 export interface MergedRows {
   /** 0-based: the row that stands for each period. */
   readonly rows: Int32Array;
-  /** Rows that no longer stand for themselves. */
-  readonly merged: number;
+  /** Rows that the values come from. */
+  readonly used: number;
   readonly carry: (column: Float64Array) => Float64Array;
   readonly carrySide: (side: Int8Array) => Int8Array;
   readonly spread: ((column: Float64Array) => ReplicateSpread) | undefined;
@@ -42,7 +42,7 @@ export function mergeDuplicates(
     merging === "last" ? (run: Int32Array) => run[run.length - 1]! : (run: Int32Array) => run[0]!;
   return {
     rows: Int32Array.from(runs, stands),
-    merged: rows.length - runs.length,
+    used: merging === "first" || merging === "last" ? runs.length : rows.length,
     carry: (column) => Float64Array.from(runs, (run) => combine(run, column, merging)),
     carrySide: (side) => Int8Array.from(runs, (run) => sideOf(run, side, merging)),
     spread: merging === "replicates" ? (column) => spreadOf(runs, column) : undefined,
@@ -62,7 +62,7 @@ function startsOfPeriods(rows: Int32Array, position: Float64Array): Int32Array {
 function unmerged(rows: Int32Array): MergedRows {
   const carry = (column: Float64Array): Float64Array => Float64Array.from(rows, (row) => column[row]!);
   const carrySide = (side: Int8Array): Int8Array => Int8Array.from(rows, (row) => side[row]!);
-  return { rows, merged: 0, carry, carrySide, spread: undefined };
+  return { rows, used: rows.length, carry, carrySide, spread: undefined };
 }
 
 function combine(run: Int32Array, column: Float64Array, merging: Merging): number {
@@ -136,5 +136,18 @@ function noteDuplicate(
     value: values.join(", "),
     message: `${axis.column} ${axis.written(run[0]!)} appears ${run.length} times, at rows ${rows}, with ${alike} (${values.join(", ")}).`,
     done: doneFor[merging],
+  });
+  columns.states.forEach(({ column }, state) => {
+    const cells = columns.values[state]!;
+    const was = Array.from(run, (row) => cells[row]!).join(", ");
+    const now = combine(run, cells, merging);
+    log.decide({
+      row: run[0]! + 1,
+      column,
+      was,
+      now,
+      why: `rows ${rows} are of one period; duplicates: "${merging}"`,
+      who: "",
+    });
   });
 }

@@ -1,5 +1,5 @@
-import type { FindingLog } from "./finding-log.js";
-import type { ObservedGroup } from "./observations.js";
+import type { FindingLog } from "../finding-log.js";
+import type { ObservedGroup } from "../observations.js";
 import type { PeriodAxis } from "./period-axis.js";
 import { stepText } from "./whole-steps.js";
 

@@ -1,7 +1,8 @@
-import type { Warning } from "../numeric/index.js";
+import type { Warning } from "../../numeric/index.js";
+import type { Observations } from "../observations.js";
+import { optionWrong } from "../refusals.js";
 import { type DifferenceSeries, differenceSeries } from "./difference-series.js";
-import type { Observations } from "./observations.js";
-import { noPairs, optionWrong } from "./refusals.js";
+import { noPairs } from "./refusals.js";
 
 /** Which differences to take. */
 export interface DifferenceOptions {

@@ -1,4 +1,4 @@
-import type { FindingLog } from "./finding-log.js";
+import type { FindingLog } from "../finding-log.js";
 import type { PeriodAxis } from "./period-axis.js";
 import { offStep } from "./refusals.js";
 

@@ -1,16 +1,16 @@
-import { type ColumnTable, columnNamed } from "./column-table.js";
-import type { FindingLog } from "./finding-log.js";
+import { type ColumnTable, columnNamed } from "../column-table.js";
+import type { FindingLog } from "../finding-log.js";
+import type { ObservationOptions } from "../observation-options.js";
+import type { ObservedGroup } from "../observations.js";
+import type { PeriodAxis } from "../period/period-axis.js";
+import { wholeSteps } from "../period/whole-steps.js";
+import type { ReadColumns } from "../read-columns.js";
 import type { RowGroup } from "./group-rows.js";
 import { inOrder } from "./in-order.js";
 import { type MergedRows, mergeDuplicates } from "./merge-duplicates.js";
-import type { ObservationOptions } from "./observation-options.js";
-import type { ObservedGroup } from "./observations.js";
-import type { PeriodAxis } from "./period-axis.js";
 import { presentRows } from "./present-rows.js";
-import type { ReadColumns } from "./read-columns.js";
-import { wholeSteps } from "./whole-steps.js";
 
-/** One series of the record, and how many of its rows were merged into others. */
+/** One series of the record, and how many rows its values come from. */
 export function observedGroup(
   rowGroup: RowGroup,
   columns: ReadColumns,
@@ -18,7 +18,7 @@ export function observedGroup(
   table: ColumnTable,
   options: ObservationOptions,
   log: FindingLog,
-): { readonly group: ObservedGroup; readonly merged: number } {
+): { readonly group: ObservedGroup; readonly used: number } {
   const { name } = rowGroup;
   const ordered = inOrder(rowGroup, axis, options.disorder ?? "refuse", log);
   const present = presentRows(ordered, columns, axis, log);
@@ -43,7 +43,7 @@ export function observedGroup(
     ...censoringOf(columns, merged),
     ...(merged.spread && { replicates: byState(columns, (state) => merged.spread!(columns.values[state]!)) }),
   };
-  return { group: Object.freeze(group), merged: merged.merged };
+  return { group: Object.freeze(group), used: merged.used };
 }
 
 function byState<T>(columns: ReadColumns, of: (state: number) => T): Readonly<Record<string, T>> {

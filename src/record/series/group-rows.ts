@@ -1,5 +1,5 @@
-import { type Column, type ColumnTable, columnNamed, isEmpty } from "./column-table.js";
-import type { FindingLog } from "./finding-log.js";
+import { type Column, type ColumnTable, columnNamed, isEmpty } from "../column-table.js";
+import type { FindingLog } from "../finding-log.js";
 
 /** The rows of one series, 0-based and in the record's order. */
 export interface RowGroup {
