@@ -1,3 +1,4 @@
+import { equilibriumLayers } from "./equilibrium-layers.js";
 import { type Axis, type Figure, figure } from "./figure.js";
 import type { Layer } from "./layer.js";
 import { significant } from "./number-text.js";
@@ -45,7 +46,10 @@ export function changeFigure(options: ChangeFigureOptions): Figure {
       const look = pair.overGap ? "open" : "plain";
       return { mark: "points", name: pair.name, x: pair.value, y: pair.change, look, style: recordedStyle };
     }),
-    ...equilibriumLayers(equilibria, still),
+    ...equilibriumLayers(
+      equilibria,
+      equilibria.map(() => still),
+    ),
   ];
   return figure({ title, x: value, y: change, layers, notes, summary: standsStill(equilibria) });
 }
@@ -59,20 +63,6 @@ function reach({ pairs, rules = [], equilibria = [] }: ChangeFigureOptions): [nu
     ([least, greatest], value) => [Math.min(least, value), Math.max(greatest, value)],
     [Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY],
   );
-}
-
-function equilibriumLayers(equilibria: readonly DrawnEquilibrium[], still: number): Layer[] {
-  const kinds = [
-    { name: "stable equilibrium", stable: true, look: "plain", style: 0 },
-    { name: "unstable equilibrium", stable: false, look: "open", style: 0 },
-    { name: "equilibrium, stability undetermined", stable: "undetermined", look: "open", style: 4 },
-  ] as const;
-  return kinds.flatMap(({ name, stable, look, style }): Layer[] => {
-    const x = equilibria.filter((each) => each.stable === stable).map((each) => each.value);
-    return x.length === 0
-      ? []
-      : [{ mark: "points", name, x, y: x.map(() => still), look, style, large: true }];
-  });
 }
 
 function standsStill(equilibria: readonly DrawnEquilibrium[]): string {

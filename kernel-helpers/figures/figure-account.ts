@@ -12,7 +12,8 @@ export function figureAccount(figure: Figure): string[] {
 function panelAccount(panel: Panel): string[] {
   const name = panel.title === "" ? "" : `Panel "${panel.title}". `;
   const axes = `${name}Across: ${axisTitle(panel.x)}; upwards: ${axisTitle(panel.y)}.`;
-  return [axes, ...panel.layers.map(layerAccount)];
+  const said = panel.layers.filter((layer) => layer.mark !== "label" && layer.inLegend !== false);
+  return [axes, ...said.map(layerAccount)];
 }
 
 function layerAccount(layer: Layer): string {
@@ -29,6 +30,8 @@ function layerAccount(layer: Layer): string {
       return `${layer.name}: level ${significant(layer.y)}.`;
     case "vertical":
       return `${layer.name}: marked at ${typeof layer.x === "number" ? significant(layer.x) : layer.x}.`;
+    case "label":
+      return layer.name;
     case "arrow":
       return `${layer.name}: an arrow pointing ${layer.towards} at ${significant(layer.x)}.`;
   }

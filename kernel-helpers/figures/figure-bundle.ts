@@ -10,7 +10,7 @@ import { thinningNotes } from "./thinning-notes.js";
 
 /** A figure for every front end: a live plot, a picture, and the numbers as text. */
 export async function figureBundle(figure: Figure): Promise<Bundle> {
-  const numbers = numbersBehind(figure);
+  const numbers = figure.numbers ?? numbersBehind(figure);
   const notes = [...figure.notes, ...thinningNotes(figure)];
   const library = libraryOnce();
   const png = await drawPicture(plotSpec(figure, widths.wide, true));

@@ -1,4 +1,4 @@
-import { type Bundle, showing } from "../tables/index.js";
+import { type Bundle, showing, type Table } from "../tables/index.js";
 import { figureBundle } from "./figure-bundle.js";
 import type { Layer } from "./layer.js";
 import { emptyFigure } from "./refusals.js";
@@ -12,6 +12,8 @@ export interface Axis {
   readonly scale?: "linear" | "log" | "category" | "date";
   /** Ends of the axis, in its unit; default: what the layers need. */
   readonly ends?: readonly [number, number];
+  /** Without ticks and grid: where places along the axis have no meaning of their own. */
+  readonly bare?: boolean;
 }
 
 /** One set of axes with what is drawn on it, in drawing order. */
@@ -31,6 +33,8 @@ export interface Figure {
   /** One or two sentences that say in words what the figure shows; "" when the layers' own account must do. */
   readonly summary: string;
   readonly notes: readonly string[];
+  /** Tables shown as the numbers behind the figure; undefined when what is drawn are those numbers. */
+  readonly numbers: readonly Table[] | undefined;
 }
 
 /** What `figure` takes: one panel's axes and layers, or several panels. */
@@ -42,6 +46,7 @@ export interface FigureOptions {
   readonly panels?: readonly Panel[];
   readonly summary?: string;
   readonly notes?: readonly string[];
+  readonly numbers?: readonly Table[];
 }
 
 /**
@@ -62,6 +67,7 @@ export function figure(options: FigureOptions): Figure {
     panels: Object.freeze([...panels]),
     summary: options.summary ?? "",
     notes: Object.freeze([...(options.notes ?? [])]),
+    numbers: options.numbers,
   };
   return showing(made, (): Promise<Bundle> => figureBundle(made));
 }

@@ -4,6 +4,7 @@ export {
   changeFigure,
   type DrawnEquilibrium,
 } from "./change-figure.js";
+export { type CobwebFigureOptions, cobwebFigure } from "./cobweb-figure.js";
 export { warmPictures } from "./draw-picture.js";
 export { type DrawnBand, type FanFigureOptions, fanFigure, type ProjectedSeries } from "./fan-figure.js";
 export { type Axis, type Figure, type FigureOptions, figure, type Panel } from "./figure.js";
@@ -23,3 +24,5 @@ export type {
 export { type DrawnProfile, type ProfileFigureOptions, profileFigure } from "./profile-figure.js";
 export { type FlaggedValue, type RecordFigureOptions, recordFigure } from "./record-figure.js";
 export type { DrawnLine, RecordedSeries } from "./recorded-series.js";
+export { type AnswerChange, type SensitivityFigureOptions, sensitivityFigure } from "./sensitivity-figure.js";
+export { type SmallMultiplesOptions, type SmallSeries, smallMultiples } from "./small-multiples.js";

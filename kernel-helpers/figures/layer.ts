@@ -21,6 +21,8 @@ export interface PointsLayer extends Named {
   readonly look?: "plain" | "open" | "flag";
   /** Drawn larger than readings are: equilibria, marks of a kind of their own. */
   readonly large?: boolean;
+  /** Drawn smaller, for many frames in one figure. */
+  readonly small?: boolean;
 }
 
 /** Values joined in their order; NaN breaks the line. */
@@ -32,6 +34,8 @@ export interface LineLayer extends Named {
   readonly dashed?: boolean;
   /** Drawn in steps: the value holds until the next place. */
   readonly stepped?: boolean;
+  /** Drawn hair-thin and whole: frames and baselines. */
+  readonly thin?: boolean;
 }
 
 /** The area between two lines. Name its level: "80% prediction". */
@@ -72,6 +76,13 @@ export interface ArrowLayer extends Named {
   readonly towards: "left" | "right" | "up" | "down";
 }
 
+/** Words at a place, beginning there and hanging below it. */
+export interface LabelLayer extends Named {
+  readonly mark: "label";
+  readonly x: number;
+  readonly y: number;
+}
+
 /** One thing drawn on a panel. */
 export type Layer =
   | PointsLayer
@@ -80,4 +91,5 @@ export type Layer =
   | ThresholdLayer
   | VerticalLayer
   | BarsLayer
-  | ArrowLayer;
+  | ArrowLayer
+  | LabelLayer;

@@ -2,6 +2,7 @@ import { type Column, type Table, table } from "../tables/index.js";
 import type { Figure, Panel } from "./figure.js";
 import type { Layer } from "./layer.js";
 import { axisTitle } from "./plot-text.js";
+import { thinned } from "./thinned.js";
 
 type Drawn = Extract<Layer, { mark: "points" | "line" | "band" | "bars" }>;
 type Row = Record<string, unknown>;
@@ -12,7 +13,9 @@ export function numbersBehind(figure: Figure): Table[] {
 }
 
 function panelNumbers(panel: Panel, title: string): Table | undefined {
-  const drawn = panel.layers.filter((layer): layer is Drawn => "x" in layer && typeof layer.x === "object");
+  const drawn = panel.layers.filter(
+    (layer): layer is Drawn => "x" in layer && typeof layer.x === "object" && layer.inLegend !== false,
+  );
   if (drawn.length === 0) return undefined;
   const lying = drawn.some((layer) => layer.mark === "bars" && layer.lying);
   const across = lying ? panel.y : panel.x;
@@ -47,8 +50,7 @@ function mergedRows(drawn: readonly Drawn[]): Row[] {
     const repeats = new Map<unknown, number>();
     const lying = layer.mark === "bars" && layer.lying;
     const places = lying ? layer.y : layer.x;
-    const step = every(layer);
-    for (let i = 0; i < places.length; i += step) {
+    for (const i of listedPlaces(layer)) {
       const place = places[i];
       const turn = repeats.get(place) ?? 0;
       repeats.set(place, turn + 1);
@@ -69,9 +71,13 @@ function valuesOf(layer: Drawn, at: number, i: number): Row {
   return { [`value${at}`]: values[i] };
 }
 
-/** Lines and bands are drawn finely; of one with many places every so manieth is listed. */
-function every(layer: Drawn): number {
-  return layer.mark === "line" || layer.mark === "band"
-    ? Math.max(1, Math.ceil((layer.x.length - 1) / 24))
-    : 1;
+const partly =
+  "Of lines and bands, places at even steps are listed; of very many points, those that are drawn.";
+
+/** Every point, but of a thinned series those that are drawn; of lines and bands, which are drawn finely, about 24. */
+function listedPlaces(layer: Drawn): readonly number[] {
+  if (layer.mark === "points") return thinned(layer.x, layer.y)?.kept ?? [...Array(layer.x.length).keys()];
+  const last = layer.x.length - 1;
+  const step = layer.mark === "bars" ? 1 : Math.max(1, Math.ceil(last / 24));
+  return Array.from({ length: Math.floor(last / step) + 1 }, (_, i) => i * step);
 }

@@ -95,9 +95,11 @@ function axisLook(axis: Axis, columns: number, still: boolean): object {
     // See-through, because marks are drawn beneath the grid and must not be painted over by it.
     gridcolor: "rgba(22,38,46,0.11)",
     zeroline: false,
+    ...(axis.bare ? { showticklabels: false, showgrid: false, ticks: "", showline: false } : {}),
     nticks: columns < 50 ? 5 : 8,
     separatethousands: true,
     exponentformat: "power",
+    minexponent: 6,
   };
 }
 

@@ -15,11 +15,22 @@ export interface Marks {
 /** Thresholds, upright marks and arrows of a panel. */
 export function panelMarks(panel: Panel, at: number, place: PanelPlace): Marks {
   const room = Math.max(14, Math.min(34, Math.floor(place.columns * 0.6)));
+  // On a narrow screen many names would run into each other; the table behind the figure has them.
+  const crowded = place.columns < 50 && panel.layers.filter(({ mark }) => mark === "label").length > 12;
   let upright = 0;
   const marks = panel.layers.map((layer, turn): Marks => {
     const { colour } = seriesStyle(layer.style ?? turn);
     if (layer.mark === "threshold") return threshold(layer, at, colour, room);
     if (layer.mark === "vertical") return vertical(layer, at, colour, upright++, room);
+    if (layer.mark === "label" && !crowded) {
+      const where = { xref: axisName("x", at), yref: axisName("y", at), x: layer.x, y: layer.y };
+      return {
+        shapes: [],
+        annotations: [
+          label(layer, 14, { ...where, xanchor: "left", yanchor: "top", font: { size: 9, color: look.ink } }),
+        ],
+      };
+    }
     if (layer.mark === "arrow") return { shapes: [], annotations: arrow(layer, at, colour, room) };
     return { shapes: [], annotations: [] };
   });
@@ -69,10 +80,10 @@ function vertical(layer: VerticalLayer, at: number, colour: string, turn: number
 
 function label(layer: Layer, room: number, where: object): object {
   return {
-    ...where,
     text: plotText(layer.name, room, 2),
     showarrow: false,
     font: { size: 12, color: look.ink },
+    ...where,
     bgcolor: "rgba(255,254,251,0.82)",
     borderpad: 1,
     align: "left",

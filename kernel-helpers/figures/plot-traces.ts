@@ -38,6 +38,7 @@ function layerTrace(layer: Layer, style: SeriesStyle): PlotTrace | undefined {
     case "threshold":
     case "vertical":
     case "arrow":
+    case "label":
       return undefined;
   }
 }
@@ -53,9 +54,18 @@ function pointsTrace(layer: PointsLayer, style: SeriesStyle): PlotTrace {
     mode: "markers",
     x: picked(layer.x, kept),
     y,
-    marker: { ...pointLook(layer.look ?? "plain", style), ...(layer.large ? { size: 13 } : {}) },
+    marker: { ...pointLook(layer.look ?? "plain", style), ...sizeOf(layer) },
     ...bars,
   };
+}
+
+/** Crowded points are small and without the light rim that sets single ones off. */
+function sizeOf({ large, small, x, look }: PointsLayer): object {
+  if (large) return { size: 13 };
+  if (look === undefined || look === "plain") {
+    if (small || x.length > 600) return { size: 3, line: { width: 0 } };
+  }
+  return {};
 }
 
 function pointLook(look: "plain" | "open" | "flag", { colour, symbol }: SeriesStyle): object {
@@ -91,7 +101,12 @@ function lineTrace(layer: LineLayer, { colour, dash }: SeriesStyle): PlotTrace {
     mode: "lines",
     x: picked(layer.x, kept),
     y: picked(layer.y, kept),
-    line: { color: colour, width: 2.2, dash: broken, ...(layer.stepped ? { shape: "hv" } : {}) },
+    line: {
+      color: colour,
+      width: layer.thin ? 0.8 : 2.2,
+      dash: layer.thin ? "solid" : broken,
+      ...(layer.stepped ? { shape: "hv" } : {}),
+    },
     connectgaps: false,
   };
 }

@@ -5,7 +5,7 @@ import { thinned } from "./thinned.js";
 /** A sentence for every layer of which not all points are drawn. */
 export function thinningNotes(figure: Figure): string[] {
   const count = (n: number): string => written(String(n), numberFormat());
-  return figure.panels
+  const notes = figure.panels
     .flatMap((panel) => panel.layers)
     .flatMap((layer) => {
       if (layer.mark !== "points" && layer.mark !== "line") return [];
@@ -15,4 +15,5 @@ export function thinningNotes(figure: Figure): string[] {
         `${layer.name}: ${count(few.kept.length)} of ${count(few.of)} points are drawn, every extreme among them.`,
       ];
     });
+  return [...new Set(notes)];
 }
