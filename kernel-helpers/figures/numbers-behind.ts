@@ -24,9 +24,7 @@ function panelNumbers(panel: Panel, title: string): Table | undefined {
     title: panel.title === "" ? `Numbers behind: ${title}` : panel.title,
     columns: [place, ...drawn.flatMap(layerColumns)],
     rows: mergedRows(drawn),
-    notes: drawn.some((layer) => every(layer) > 1)
-      ? ["Of lines and bands, places at even steps are listed."]
-      : [],
+    notes: drawn.some((layer) => listedPlaces(layer).length < layer.x.length) ? [partly] : [],
     limit: 60,
   });
 }
