@@ -32,9 +32,9 @@ export function columnsOf(record: RecordLike): ColumnTable {
 function columnsOfFrame(frame: DataFrame): ColumnTable {
   // The getter builds nothing, but is asked once: `column()` copies every row each time.
   const rows = frame.values as readonly (readonly unknown[])[];
-  const { names, decisions } = notesOf(frame);
-  const columns = frame.columns.map((_, at) => packed(rows.map((row) => row[at])));
-  return { names: names ?? [...frame.columns], columns, ...(decisions && { decisions }) };
+  const { names = frame.columns, decisions, raw = names.length } = notesOf(frame);
+  const columns = names.slice(0, raw).map((_, at) => packed(rows.map((row) => row[at])));
+  return { names: names.slice(0, raw), columns, ...(decisions && { decisions }) };
 }
 
 function columnsOfRows(rows: readonly unknown[]): ColumnTable {

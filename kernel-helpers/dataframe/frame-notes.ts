@@ -7,6 +7,8 @@ export interface FrameNotes {
   /** Where the record was read from. */
   readonly source?: RecordSource;
   readonly decisions?: readonly Decision[];
+  /** Columns of the record, where columns of corrected values stand behind them. */
+  readonly raw?: number;
   /** Names of the record, where the frame could not carry them. */
   readonly names?: readonly string[];
 }

@@ -1,5 +1,12 @@
 import type { DataFrame } from "danfojs-node";
-import { type Column, type ColumnTable, rowCount } from "../../src/record/index.js";
+import {
+  type Column,
+  type ColumnTable,
+  columnNamed,
+  decided,
+  packed,
+  rowCount,
+} from "../../src/record/index.js";
 import { danfo } from "./danfo.js";
 import { noteFrame } from "./frame-notes.js";
 import { showFrames } from "./show-frames.js";
@@ -12,7 +19,8 @@ import { showFrames } from "./show-frames.js";
  * `shape`), an empty one and a second equal one cannot be carried: such a column is called "values (column)",
  * and the commands of this package still know it by the record's name.
  */
-export function toFrame(table: ColumnTable): DataFrame {
+export function toFrame(record: ColumnTable): DataFrame {
+  const table = withCorrected(record);
   const names = frameNames(table.names);
   const dtypes = table.columns.map(kindOf);
   const rows = Array.from({ length: rowCount(table) }, (_, row) =>
@@ -23,9 +31,24 @@ export function toFrame(table: ColumnTable): DataFrame {
   const renamed = names.some((name, i) => name !== table.names[i]);
   noteFrame(frame, {
     ...(renamed && { names: table.names }),
-    ...(table.decisions && { decisions: table.decisions }),
+    ...(record.decisions && { decisions: record.decisions, raw: record.names.length }),
   });
   return frame;
+}
+
+/** Beside every column with a correction, a column of what is used instead; the raw one stays as it was read. */
+function withCorrected(table: ColumnTable): ColumnTable {
+  const names = [...new Set((table.decisions ?? []).map(({ column }) => column))].filter(
+    (name) => name !== "",
+  );
+  const used = decided(table);
+  return {
+    names: [...table.names, ...names.map((name) => `${name} (corrected)`)],
+    columns: [
+      ...table.columns,
+      ...names.map((name) => packed(Array.from(columnNamed(used, name, "a correction")))),
+    ],
+  };
 }
 
 /** danfo guesses a column's kind from its first rows; here every cell is asked. */

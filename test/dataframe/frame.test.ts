@@ -112,7 +112,10 @@ test("any observations turned into a frame and back are the same observations", 
     )
     .map((steps) => {
       let week = 0;
-      return steps.map(({ gap, stock, input }) => ({ week: (week += gap), stock, input }));
+      return steps.map(({ gap, stock, input }) => {
+        week += gap;
+        return { week, stock, input };
+      });
     });
   fc.assert(
     fc.property(record, (rows) => {

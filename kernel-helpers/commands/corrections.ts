@@ -1,0 +1,89 @@
+import type { DataFrame } from "danfojs-node";
+import {
+  type Correction,
+  correct as correctTable,
+  type Decision,
+  type Observations,
+  undo as undoLast,
+} from "../../src/record/index.js";
+import { columnsOf, noteFrame, notesOf, type RecordLike, toFrame } from "../dataframe/index.js";
+import { bundleOf, showing, table } from "../tables/index.js";
+import { caseLog } from "./case-log.js";
+
+/**
+ * Corrects one cell of a record, or leaves a row out. The raw column stays as it was read; beside it stands a
+ * column of what is used instead, and `observations` uses that one. The decision is noted for the write-up.
+ *
+ * @returns a new frame; the one given is not changed.
+ * @throws {ModelError} `no-such-row` | `missing-column` | `reason-missing`.
+ * @example
+ * const checked = correct(readings, { row: 14, column: "payment", now: 447, why: "35.00 fee paid with it", who: "A. K." });
+ */
+export function correct(record: RecordLike, correction: Correction): DataFrame {
+  const corrected = correctTable(columnsOf(record), correction);
+  caseLog.noteStep(`correction: ${sentence(corrected.decisions!.at(-1)!)}`);
+  return sameSource(record, toFrame(corrected));
+}
+
+/**
+ * Takes back the last correction of a record, or the last one of a row.
+ *
+ * @throws {ModelError} `no-decision` when there is none.
+ * @example const asRead = undo(checked);
+ */
+export function undo(record: RecordLike, row?: number): DataFrame {
+  const before = columnsOf(record);
+  const after = undoLast(before, row);
+  const taken = before.decisions!.find((decision) => !after.decisions?.includes(decision));
+  if (taken) caseLog.noteStep(`correction taken back: ${sentence(taken)}`);
+  return sameSource(record, toFrame(after));
+}
+
+/** The corrections of a record, in the order in which they were made. */
+export interface DecisionsLog {
+  readonly kind: "decisions";
+  readonly decisions: readonly Decision[];
+}
+
+/**
+ * The decisions log of a record or of observations: row, column, what was read, what is used, why, and who.
+ *
+ * @example decisionsLog(checked);
+ */
+export function decisionsLog(record: RecordLike | Observations): DecisionsLog {
+  const isObserved = (record as Partial<Observations>).kind === "observations";
+  const { decisions = [] } = isObserved ? (record as Observations) : columnsOf(record as RecordLike);
+  const made: DecisionsLog = { kind: "decisions", decisions };
+  return showing(made, async () => (await bundleOf(logTable(decisions))) ?? {});
+}
+
+function logTable(decisions: readonly Decision[]): object {
+  return table({
+    title: "Decisions log",
+    columns: [
+      { key: "row", label: "Row", kind: "integer" },
+      { key: "column", label: "Column", kind: "text" },
+      { key: "was", label: "Was", kind: "number", digits: 15 },
+      { key: "now", label: "Now", kind: "number", digits: 15 },
+      { key: "why", label: "Why", kind: "text" },
+      { key: "who", label: "Who", kind: "text" },
+    ],
+    rows: decisions.map((decision) => ({ ...decision, column: decision.column || "whole row" })),
+    notes: decisions.length === 0 ? ["The record is used as it was read."] : [],
+    format: { group: "" },
+  });
+}
+
+function sentence({ row, column, was, now, why, who }: Decision): string {
+  const what =
+    column === ""
+      ? `row ${row} left out`
+      : `row ${row}, ${column}: was ${was ?? "nothing"}, now ${now ?? "nothing"}`;
+  return `${what}, because: ${why}${who === "" ? "" : ` (${who})`}`;
+}
+
+function sameSource(record: RecordLike, frame: DataFrame): DataFrame {
+  const { source } = notesOf(record);
+  if (source !== undefined) noteFrame(frame, { ...notesOf(frame), source });
+  return frame;
+}
