@@ -1,5 +1,5 @@
 import { type Reach, type ReachOptions, reaches as reachesValue } from "../../src/decision/index.js";
-import type { Forecast } from "../../src/projection/index.js";
+import type { Forecast, Simulation } from "../../src/projection/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { shownTogether } from "./shown-together.js";
@@ -10,7 +10,7 @@ import { shownTogether } from "./shown-together.js";
  *
  * @example reaches(ahead, { state: "N", value: 120, direction: "rising" }).sentence;
  */
-export function reaches(ahead: Forecast, options: ReachOptions): Reach {
+export function reaches(ahead: Forecast | Simulation, options: ReachOptions): Reach {
   const found = reachesValue(ahead, options);
   caseLog.noteStep(`asked when ${found.state} reaches ${found.value} ${found.unit}, ${found.direction}`);
   return showing({ ...found }, () => shownTogether([reachTable(found)]));

@@ -1,2 +1,4 @@
-export type { Direction } from "./crossing.js";
-export { type GroupReach, type Reach, type ReachOptions, reaches } from "./reaches.js";
+export type { AcrossUnits } from "./across-units.js";
+export type { DeltaMargin } from "./delta-margin.js";
+export type { GroupReach, Reach, ReachOptions } from "./reach.js";
+export { reaches } from "./reaches.js";

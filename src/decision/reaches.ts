@@ -1,109 +1,118 @@
 import { quantile } from "../numeric/index.js";
-import type { Forecast, GroupForecast } from "../projection/index.js";
-import { type Crossing, crossing, type Direction } from "./crossing.js";
-import { reachSentence } from "./reach-sentence.js";
-import { refuseStateUnknown, refuseTarget } from "./refusals.js";
-
-/** The question: when does a state get to a value? */
-export interface ReachOptions {
-  /** Default: the only state. */
-  readonly state?: string;
-  /** In the state's unit. */
-  readonly value: number;
-  readonly direction: Direction;
-  /** Level of the interval; default 0.95. */
-  readonly level?: number;
-}
-
-/** The answer for one group. Times are in the unit of the period column. */
-export interface GroupReach {
-  readonly group: string;
-  /** On the path at the estimates; undefined where it does not get there within the forecast. */
-  readonly time: number | undefined;
-  /** First recorded period at or past the value, on the path at the estimates. */
-  readonly firstPeriod: number | undefined;
-  /** Across draws; a limit is undefined where that share of draws never gets there. */
-  readonly lower: number | undefined;
-  readonly upper: number | undefined;
-  /** Share of draws that never get there within the forecast, and its Monte-Carlo error. */
-  readonly never: number;
-  readonly neverError: number;
-  /** Last time the forecast covers. */
-  readonly horizon: number;
-  readonly sentence: string;
-}
-
-/** When a state reaches a value, with its margin. */
-export interface Reach {
-  readonly kind: "reach";
-  readonly state: string;
-  readonly unit: string;
-  readonly periodUnit: string;
-  readonly value: number;
-  readonly direction: Direction;
-  readonly level: number;
-  /** What the margin carries. */
-  readonly margin: "constants" | "constants and process errors";
-  readonly groups: readonly GroupReach[];
-  readonly sentence: string;
-}
+import { type Forecast, fitGround, type GroupForecast, type Simulation } from "../projection/index.js";
+import { type Rule, roughness } from "../rule/index.js";
+import { acrossUnits } from "./across-units.js";
+import { crossing } from "./crossing.js";
+import { type DeltaMargin, deltaMargin } from "./delta-margin.js";
+import { drawnPassages } from "./drawn-passages.js";
+import { levelling } from "./levelling.js";
+import type { GroupReach, Reach, ReachOptions, ReachQuestion } from "./reach.js";
+import { groupSentence, reachSentence } from "./reach-sentence.js";
+import { refuseLevel, refuseStateUnknown, refuseTarget } from "./refusals.js";
 
 /**
- * When a forecast state first reaches a value: the time on the fitted path, an interval across draws, the first
- * recorded period, and the probability that it never does within the forecast.
+ * When a projected state first reaches a value: the time on the path without random change, an interval across
+ * draws, the first recorded period, the distribution over periods, and the probability that it never does within the
+ * forecast.
  *
- * The interval is for the mean path where the error is one of observation, and carries the process errors
- * where the fit has them. Between two periods a straight line is taken.
+ * The interval is for the mean path where the error is one of observation (`meanPath` has it by the delta
+ * method as well), and carries the process errors where the fit has them. For several units, a new unit's time
+ * has the variance between units added. Between two periods the time lies on the path's own curve: the fractional
+ * step of the Moebius map through four neighbouring values, exact for geometric, affine and Beverton-Holt rules; a
+ * straight line where the rule has kinks, its path turns, or chance moves it.
  *
- * @throws {ModelError} `unknown-state` | `target-not-finite`.
+ * @throws {ModelError} `unknown-state` | `target-not-finite` | `level-outside` | `paths-not-kept`.
  * @example reaches(forecast(fitted, { periods: 20 }), { value: 120, direction: "rising" }).sentence;
  */
-export function reaches(forecast: Forecast, options: ReachOptions): Reach {
-  const { rule } = forecast.fit;
-  const state = options.state ?? rule.states[0]!;
-  const place = rule.states.indexOf(state);
-  if (place < 0) throw refuseStateUnknown(state, rule.states);
-  if (!Number.isFinite(options.value)) throw refuseTarget(options.value);
-  const { value, direction, level = 0.95 } = options;
-  const process = forecast.fit.options.errors === "process";
-  const { observations } = forecast.fit;
-  const question = {
+export function reaches(ahead: Forecast | Simulation, options: ReachOptions): Reach {
+  const rule = ruleOf(ahead);
+  const question = questionOf(ahead, rule, options);
+  const smooth = rule.inputs.length === 0 && isSmooth(rule);
+  const groups = ahead.groups.map((group) => groupReach(ahead, group, question, smooth));
+  const across = ahead.kind === "forecast" ? acrossUnits(groups, question.level) : undefined;
+  const sentence = reachSentence(ahead, groups, across, question);
+  return Object.freeze({ kind: "reach", ...question, groups: Object.freeze(groups), across, sentence });
+}
+
+function ruleOf(ahead: Forecast | Simulation): Rule {
+  return ahead.kind === "forecast" ? ahead.fit.rule : ahead.rule;
+}
+
+function isSmooth(rule: Rule): boolean {
+  const { kinks, jumps } = roughness(rule);
+  return kinks.length === 0 && jumps.length === 0;
+}
+
+function questionOf(ahead: Forecast | Simulation, rule: Rule, options: ReachOptions): ReachQuestion {
+  const { value, direction, level = 0.95, state = rule.states[0]! } = options;
+  if (!rule.states.includes(state)) throw refuseStateUnknown(state, rule.states);
+  if (!Number.isFinite(value)) throw refuseTarget(value);
+  if (!(level > 0 && level < 1)) throw refuseLevel(level);
+  const period = ahead.kind === "forecast" ? ahead.fit.observations.period.unit : "period";
+  return {
     state,
-    unit: observations.states.find((each) => each.name === state)!.unit,
-    periodUnit: observations.period.unit,
+    unit: ahead.groups[0]!.states.find((each) => each.state === state)!.unit,
+    periodUnit: period,
     value,
     direction,
     level,
-    margin: process ? "constants and process errors" : "constants",
-  } as const;
-  const groups = forecast.groups.map((group) => groupReach(group, place, question, process));
-  const sentence = groups.map((group) => group.sentence).join(" ");
-  return Object.freeze({ kind: "reach", ...question, groups: Object.freeze(groups), sentence });
+    margin: marginOf(ahead),
+  };
 }
 
-type Question = Omit<Reach, "kind" | "groups" | "sentence">;
+function marginOf(ahead: Forecast | Simulation): Reach["margin"] {
+  if (ahead.kind === "simulation") return "random change";
+  return ahead.fit.options.errors === "observation" ? "constants" : "constants and process errors";
+}
 
-function groupReach(group: GroupForecast, place: number, question: Question, process: boolean): GroupReach {
-  const { value, direction, level } = question;
+function groupReach(
+  ahead: Forecast | Simulation,
+  group: GroupForecast,
+  question: ReachQuestion,
+  smooth: boolean,
+): GroupReach {
+  const { value, direction, level, state } = question;
   const length = group.index.length;
-  const draws = process ? group.draws.future[place]! : group.draws.mean[place]!;
-  const found = Float64Array.from({ length: group.draws.paths }, (_, path) => {
-    const at = crossing(draws, path * length, length, value, direction);
-    return at === undefined ? Number.POSITIVE_INFINITY : at.between;
-  }).sort();
-  const central = crossing(group.states[place]!.central, 0, length, value, direction);
-  const never = found.filter((at) => at === Number.POSITIVE_INFINITY).length / found.length;
+  const place = group.states.findIndex((each) => each.state === state);
+  const found = drawnPassages(group, place, question, smooth);
+  const central = crossing(group.states[place]!.central, 0, length, value, direction, smooth);
+  const draws = found.length;
+  const never = found.filter((at) => at === Number.POSITIVE_INFINITY).length / draws;
   const answer = {
     group: group.group,
+    scenario: group.scenario,
     time: timeOf(group, central?.between),
     firstPeriod: timeOf(group, central?.period),
     lower: timeOf(group, limit(found, (1 - level) / 2)),
     upper: timeOf(group, limit(found, (1 + level) / 2)),
+    median: timeOf(group, limit(found, 0.5)),
+    meanPath: meanPath(ahead, group, question, smooth),
     never,
-    neverError: Math.sqrt((never * (1 - never)) / found.length),
+    neverError: Math.sqrt((never * (1 - never)) / draws),
+    draws,
+    distribution: distributionOf(group, found),
+    tendsTo: central === undefined ? levelling(group, place, level) : undefined,
     horizon: group.time[length - 1]!,
   };
-  return { ...answer, sentence: reachSentence(answer, question) };
+  return Object.freeze({ ...answer, sentence: groupSentence(ahead, answer, question) });
+}
+
+function meanPath(
+  ahead: Forecast | Simulation,
+  group: GroupForecast,
+  question: ReachQuestion,
+  smooth: boolean,
+): DeltaMargin | undefined {
+  if (ahead.kind === "simulation") return undefined;
+  const { fit, options } = ahead;
+  const fitted = fit.groups.find((each) => each.group === group.group)!;
+  const ground = fitGround(fit, fitted, options.periods, group.plans);
+  const place = fit.rule.states.indexOf(question.state);
+  return deltaMargin(fit, ground, question.level, ({ values }) => {
+    const path = values[place]!;
+    const at = crossing(path, 0, path.length, question.value, question.direction, smooth);
+    return timeOf(group, at?.between);
+  });
 }
 
 /** A quantile of crossings among which "never" stands as infinite; undefined where it falls among those. */
@@ -112,7 +121,22 @@ function limit(found: Float64Array, probability: number): number | undefined {
   return Number.isFinite(upper) ? quantile(found, probability) : undefined;
 }
 
-function timeOf(group: GroupForecast, at: Crossing["between"] | undefined): number | undefined {
+/** Shares of draws by the first whole period at or past the value. */
+function distributionOf(group: GroupForecast, found: Float64Array): GroupReach["distribution"] {
+  const counts = new Map<number, number>();
+  for (const at of found) {
+    if (!Number.isFinite(at)) break;
+    const period = Math.ceil(at);
+    counts.set(period, (counts.get(period) ?? 0) + 1);
+  }
+  let sum = 0;
+  return [...counts].map(([period, count]) => {
+    sum += count;
+    return { time: timeOf(group, period)!, share: count / found.length, by: sum / found.length };
+  });
+}
+
+function timeOf(group: GroupForecast, at: number | undefined): number | undefined {
   if (at === undefined) return undefined;
   const step = group.time.length > 1 ? group.time[1]! - group.time[0]! : 0;
   return group.time[0]! + at * step;

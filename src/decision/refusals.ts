@@ -15,3 +15,21 @@ export function refuseTarget(value: number): ModelError {
     { value },
   );
 }
+
+export function refuseLevel(level: number): ModelError {
+  return new ModelError(
+    "level-outside",
+    `An interval has a level between 0 and 1, such as 0.95; ${level} was given.`,
+    {
+      level,
+    },
+  );
+}
+
+export function refuseNotWatched(state: string, value: number, direction: string): ModelError {
+  return new ModelError(
+    "paths-not-kept",
+    `The paths were too many to keep, and ${state} at ${value} was not watched. Run it again with watch: [{ state: "${state}", value: ${value}, direction: "${direction}" }].`,
+    { state, value, direction },
+  );
+}

@@ -1,5 +1,5 @@
 import type { Fit, GroupFit } from "../estimate/index.js";
-import type { RandomStream } from "../numeric/index.js";
+import { choleskyFactor, type RandomStream } from "../numeric/index.js";
 import { drawAlongProfile, loosest } from "./draw-along-profile.js";
 import { type ConstantsDraw, constantsDraw } from "./draw-constants.js";
 import { blockSize, type Starts } from "./ensemble.js";
@@ -56,6 +56,7 @@ export function drawnStarts(
   const initial = new Float64Array(paths * width);
   const unknowns = new Float64Array(ground.group.estimates.length);
   const stands = boundsOf(fit, ground.group);
+  const begin = beginning(ground);
   let discarded = 0;
   for (let path = 0; path < paths; path++) {
     const stream = streams[Math.floor(path / blockSize)]!;
@@ -65,13 +66,29 @@ export function drawnStarts(
       source.draw(stream, unknowns);
     }
     constants.set(ground.constants, path * size);
-    initial.set(ground.initial, path * width);
+    initial.set(begin(stream), path * width);
     ground.places.forEach((place, i) => {
       if (place >= size) initial[path * width + place - size] = unknowns[i]!;
       else if (place >= 0) constants[path * size + place] = unknowns[i]!;
     });
   }
   return { paths, size, constants, initial, method: source.method, followed: source.followed, discarded };
+}
+
+/** The first state vector of a path: known, or drawn from what a filter believes of it. */
+function beginning({ belief, initial }: FitGround): (stream: RandomStream) => Float64Array {
+  const size = initial.length;
+  const factor = belief && choleskyFactor(belief.covariance, size);
+  if (belief === undefined || factor === undefined) return () => initial;
+  const normals = new Float64Array(size);
+  return (stream) => {
+    for (let i = 0; i < size; i++) normals[i] = stream.normal();
+    return Float64Array.from(belief.mean, (mean, i) => {
+      let value = mean;
+      for (let k = 0; k <= i; k++) value += factor[i * size + k]! * normals[k]!;
+      return belief.log ? Math.exp(value) : value;
+    });
+  };
 }
 
 function boundsOf(fit: Fit, group: GroupFit): (unknowns: Float64Array) => boolean {

@@ -14,6 +14,8 @@ export interface FitGround extends Ground {
   readonly recordEnd: number;
   /** By unknown of the fit: slot among constants, then state vector; -1 where the path does not begin with it. */
   readonly places: Int32Array;
+  /** Where a filter leaves the present state uncertain: its mean and covariance, on the log scale or not. */
+  readonly belief?: { readonly mean: Float64Array; readonly covariance: Float64Array; readonly log: boolean };
 }
 
 /**
@@ -30,11 +32,12 @@ export function fitGround(fit: Fit, group: GroupFit, periods: number, plans: Inp
   const from = trajectory ? reach : recordEnd;
   const slots = [...rule.states.map((state) => ({ state, lag: 0 })), ...rule.memory];
   const names = slots.map(({ state, lag }) => `${state}[${reach - lag}]`);
-  const initial = Float64Array.from(slots, ({ state, lag }, s) =>
-    trajectory
-      ? fittedStart(fit, group, names[s]!, state, lag)
-      : recordedAt(recorded, state, recordEnd - lag),
-  );
+  const belief = beliefOf(fit, group);
+  const initial = Float64Array.from(slots, ({ state, lag }, s) => {
+    if (belief !== undefined) return belief.log ? Math.exp(belief.mean[s]!) : belief.mean[s]!;
+    if (trajectory) return fittedStart(fit, group, names[s]!, state, lag);
+    return recordedAt(recorded, state, recordEnd - lag);
+  });
   const width = rule.constants.length;
   const places = Int32Array.from(group.estimates, ({ name, role }) => {
     if (role === "constant") return rule.constants.indexOf(name);
@@ -53,6 +56,16 @@ export function fitGround(fit: Fit, group: GroupFit, periods: number, plans: Inp
     recorded,
     recordEnd,
     places,
+    ...(belief && { belief }),
+  };
+}
+
+function beliefOf(fit: Fit, { filter }: GroupFit): FitGround["belief"] {
+  if (filter === undefined) return undefined;
+  return {
+    mean: Float64Array.from(filter.last.mean),
+    covariance: Float64Array.from(filter.last.covariance),
+    log: fit.options.spread === "proportional",
   };
 }
 

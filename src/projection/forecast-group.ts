@@ -7,15 +7,15 @@ import { type DrawnStarts, drawnStarts, type UnknownsDraw, unknownsDraw } from "
 import { blockStreams, type EnsembleRun, runEnsemble } from "./ensemble.js";
 import { type FitGround, fitGround } from "./fit-ground.js";
 import { fittedNoise } from "./fitted-noise.js";
-import type { ForecastOptions, ForecastSettings } from "./forecast.js";
+import type { ForecastOptions, ForecastSettings } from "./forecast-options.js";
 import { forecastWarnings } from "./forecast-warnings.js";
 import { type Gatherer, gatherer } from "./gather.js";
-import type { InputPlans } from "./input-plan.js";
 import { noiseDraw } from "./noise.js";
 import { passagesOf, placedWatches } from "./placed-watches.js";
 import { type Predictability, predictabilityOf } from "./predictability.js";
 import type { GroupForecast } from "./projected-group.js";
 import { refuseNoPath } from "./refusals.js";
+import type { Scenario } from "./scenarios.js";
 
 type Settled = ForecastOptions & ForecastSettings;
 
@@ -23,20 +23,20 @@ type Settled = ForecastOptions & ForecastSettings;
 export function forecastGroup(
   fit: Fit,
   group: GroupFit,
-  scenarios: readonly { readonly name: string; readonly plans: InputPlans }[],
+  scenarios: readonly Scenario[],
   options: Settled,
   stream: RandomStream,
 ): readonly GroupForecast[] {
   const grounds = scenarios.map(({ plans }) => fitGround(fit, group, options.periods, plans));
   const source = unknownsDraw(fit, group);
   const seeds = blockStreams(stream, options.paths);
-  return grounds.map((ground, i) => projected(fit, ground, scenarios[i]!.name, options, source, seeds));
+  return grounds.map((ground, i) => projected(fit, ground, scenarios[i]!, options, source, seeds));
 }
 
 function projected(
   fit: Fit,
   ground: FitGround,
-  scenario: string,
+  scenario: Scenario,
   options: Settled,
   source: UnknownsDraw,
   seeds: readonly RandomStream[],
@@ -60,7 +60,8 @@ function projected(
   const step = observations.period.step.every;
   return {
     group: group.group,
-    scenario,
+    scenario: scenario.name,
+    plans: scenario.plans,
     index,
     time: index.map((t) => ground.recorded.time[0]! + t * step),
     recordEnd,

@@ -1,5 +1,8 @@
 export type { Band } from "./band.js";
-export { type Forecast, type ForecastOptions, forecast } from "./forecast.js";
+export { type CentralPath, centralPath, type Ground } from "./central-path.js";
+export { type FitGround, fitGround } from "./fit-ground.js";
+export { type Forecast, forecast } from "./forecast.js";
+export type { ForecastOptions } from "./forecast-options.js";
 export type { InputPlan, InputPlans } from "./input-plan.js";
 export type { Noise } from "./noise.js";
 export type { Direction, Passage, Watch } from "./passage.js";

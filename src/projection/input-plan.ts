@@ -2,9 +2,8 @@ import { refusePlan, refuseShortPlan } from "./refusals.js";
 
 /**
  * What an input will be: one number throughout; a value for each period, the first of the projection first; or a
- * usual level with steps that last (`from`) and one-off events (`at`), by the number of the period.
- *
- * @example { usual: 300, from: { 13: 450 }, at: { 20: 0 } } // 450 from period 13 on, nothing in period 20
+ * usual level with steps that last (`from`) and one-off events (`at`), by the number of the period. So
+ * `{ usual: 300, from: { 13: 450 }, at: { 20: 0 } }` pays 450 from period 13 on and nothing in period 20.
  */
 export type InputPlan =
   | number

@@ -1,5 +1,6 @@
 import type { Warning } from "../numeric/index.js";
 import type { Band } from "./band.js";
+import type { InputPlans } from "./input-plan.js";
 import type { Passage } from "./passage.js";
 import type { PathDraws } from "./path-draws.js";
 import type { Predictability } from "./predictability.js";
@@ -21,6 +22,8 @@ export interface GroupForecast {
   readonly group: string;
   /** "" where there is a single scenario. */
   readonly scenario: string;
+  /** The plans of inputs that it stands on. */
+  readonly plans: InputPlans;
   /** Step indexes: from period 0 for a trajectory fit, from the last recorded one for a one-step fit. */
   readonly index: readonly number[];
   /** The period column's values there. */

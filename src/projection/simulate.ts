@@ -84,7 +84,7 @@ export function simulate(rule: Rule, options: SimulateOptions): Simulation {
   const groups = scenariosOf(options).map(({ name, plans }) => {
     const inputs = plannedInputs(rule, plans, { recorded: () => [], rows: 0, last: periods, firstNumber: 0 });
     const ground = { rule, compiled, constants, initial, inputs, from: 0, periods };
-    return simulated(ground, name, { ...options, ...settings }, change);
+    return simulated(ground, name, plans, { ...options, ...settings }, change);
   });
   return Object.freeze({
     kind: "simulation",
@@ -100,6 +100,7 @@ type Settled = SimulateOptions & Required<Pick<SimulateOptions, "paths" | "seed"
 function simulated(
   ground: Ground,
   scenario: string,
+  plans: InputPlans,
   options: Settled,
   change: readonly (Noise | undefined)[],
 ): GroupForecast {
@@ -141,6 +142,7 @@ function simulated(
   return {
     group: "",
     scenario,
+    plans,
     index,
     time: index,
     recordEnd: 0,

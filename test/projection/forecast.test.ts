@@ -25,10 +25,8 @@ describe("log-linear growth from 24 increments", () => {
   const pattern = Array.from({ length: n }, (_, i) => normalQuantile(((i * 7) % n) / n + 0.5 / n));
   const mean = pattern.reduce((sum, z) => sum + z, 0) / n;
   const scale = Math.sqrt(pattern.reduce((sum, z) => sum + (z - mean) ** 2, 0) / (n - 1));
-  const logs = pattern.reduce<number[]>(
-    (all, z) => [...all, all[all.length - 1]! + 0.03 + (0.06 * (z - mean)) / scale],
-    [Math.log(100)],
-  );
+  const logs = [Math.log(100)];
+  for (const z of pattern) logs.push(logs[logs.length - 1]! + 0.03 + (0.06 * (z - mean)) / scale);
   const fitted = fit(
     recurrence("x[t+1] = R*x", { bounds: { R: [0, Infinity] } }),
     recordOf(logs.map(Math.exp)),

@@ -1,0 +1,20 @@
+import type { Fit } from "../estimate/index.js";
+
+/** The record that an answer stands on: "the record of 58 values to hour 240". */
+export function recordWords(fit: Fit): string {
+  const { groups, period } = fit.observations;
+  const count = groups.reduce(
+    (sum, group) =>
+      sum + Object.values(group.values).reduce((n, values) => n + values.filter(Number.isFinite).length, 0),
+    0,
+  );
+  const last = Math.max(...groups.map((group) => group.time[group.time.length - 1]!));
+  const label = groups.length === 1 ? groups[0]!.labels?.[groups[0]!.labels.length - 1] : undefined;
+  return `the record of ${count} values to ${label ?? `${period.unit} ${Number(last.toPrecision(6))}`}`;
+}
+
+/** How a group is named: "flask B", or "N" where there is a single one. */
+export function groupWords(fit: Fit | undefined, group: string): string {
+  const [column] = fit?.observations.by ?? [];
+  return column === undefined || group.startsWith(column) ? group : `${column} ${group}`;
+}

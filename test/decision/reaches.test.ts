@@ -1,0 +1,185 @@
+import { describe, expect, test } from "vitest";
+import { reaches } from "../../src/decision/index.js";
+import { fit } from "../../src/estimate/index.js";
+import { forecast, simulate } from "../../src/projection/index.js";
+import { recurrence } from "../../src/rule/index.js";
+import { cultureRecord, flaskRecord } from "./harbour-records.js";
+
+const sheltered = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)", {
+  bounds: { R: [1, Infinity], K: [0, Infinity] },
+});
+
+describe("a culture on its way to a density", () => {
+  const fitted = fit(sheltered, cultureRecord(), { errors: "observation", spread: "proportional" });
+  const ahead = forecast(fitted, { periods: 40, paths: 4000, seed: 2 });
+
+  test("gets to .80 at 8.145 h, and at the first half hour at 8.5", () => {
+    // Source: the same record fitted in R 4.2 (nls); time by the closed form ln(A(K-N0)/(N0(K-A)))/r, interval by the delta
+    // method with t(18), printed to a thousandth: half a unit, and what four digits of the estimates leave.
+    const { groups } = reaches(ahead, { value: 0.8, direction: "rising" });
+    const [answer] = groups;
+    expect(answer!.time).toBeCloseTo(8.145, 3);
+    expect(answer!.meanPath!.lower).toBeCloseTo(8.055, 3);
+    expect(answer!.meanPath!.upper).toBeCloseTo(8.236, 3);
+    expect(answer!.firstPeriod).toBe(8.5);
+    // The draws carry the same margin; their limits scatter by .002 (quantile error of 4000 draws), profile 8.058 to 8.239.
+    expect(Math.abs(answer!.lower! - 8.058)).toBeLessThan(0.008);
+    expect(Math.abs(answer!.upper! - 8.239)).toBeLessThan(0.008);
+    expect(answer!.never).toBe(0);
+  });
+
+  test("does not get to 1.8, and says where it levels off", () => {
+    // Source: as above: capacity 1.52 (1.41 to 1.65 by its profile); the level at the end of the forecast is within 0.1% of it.
+    const found = reaches(forecast(fitted, { periods: 60, seed: 2 }), { value: 1.8, direction: "rising" });
+    expect(found.groups[0]!.time).toBeUndefined();
+    expect(found.groups[0]!.tendsTo!.value).toBeCloseTo(1.52, 2);
+    expect(found.sentence).toMatch(
+      /^N does not reach 1\.8 by hour 40; the path levels off near 1\.52\d? \(95% interval 1\.4\d+ to 1\.6\d+\); in fewer than 1 in 1000 draws|in about 0\.\d+% of draws/,
+    );
+  });
+
+  test("says so in one sentence", () => {
+    expect(reaches(ahead, { value: 0.8, direction: "rising" }).sentence).toMatch(
+      /^N reaches 0\.8 at hour 8\.14\d \(95% interval 8\.0\d\d to 8\.2\d\d\); the first recorded hour at or past it is 8\.5, provided it goes on as in the record of 21 values to hour 10\. The margin is that of the fitted constants, not of a further reading's error\.$/,
+    );
+  });
+});
+
+describe("a walk in normal steps", () => {
+  const periods = 10;
+  const found = simulate(recurrence("x[t+1] = x + c"), {
+    constants: { c: 0 },
+    initial: { x: 0 },
+    periods,
+    noise: { x: { kind: "additive", sd: 1 } },
+    paths: 50_000,
+    seed: 8,
+  });
+  const passage = reaches(found, { value: -1e-12, direction: "falling" });
+
+  test("first passes below its start by n with probability 1 - C(2n, n)/4^n", () => {
+    // Source: Sparre Andersen (1953), Mathematica Scandinavica 1:263: exact for any symmetric continuous step (from memory).
+    // Tolerance: 4.5 Monte-Carlo errors.
+    let staying = 1;
+    for (let n = 1; n <= periods; n++) {
+      staying *= (2 * n - 1) / (2 * n);
+      const by = passage.groups[0]!.distribution.find((row) => row.time === n)!.by;
+      expect(Math.abs(by - (1 - staying))).toBeLessThan(4.5 * Math.sqrt((staying * (1 - staying)) / 50_000));
+    }
+    expect(passage.groups[0]!.never).toBeCloseTo(1 - passage.groups[0]!.distribution[periods - 1]!.by, 12);
+  });
+
+  test("the Monte-Carlo error printed with the probability is the spread over 50 seeds", () => {
+    const again = Array.from(
+      { length: 50 },
+      (_, seed) =>
+        reaches(
+          simulate(recurrence("x[t+1] = x + c"), {
+            constants: { c: 0 },
+            initial: { x: 0 },
+            periods,
+            noise: { x: { kind: "additive", sd: 1 } },
+            paths: 1000,
+            seed: seed + 1,
+          }),
+          { value: -1e-12, direction: "falling" },
+        ).groups[0]!,
+    );
+    const mean = again.reduce((sum, each) => sum + each.never, 0) / 50;
+    const spread = Math.sqrt(again.reduce((sum, each) => sum + (each.never - mean) ** 2, 0) / 49);
+    // A standard deviation from 50 values is known to 10%; 3.3 of those.
+    expect(Math.abs(spread / again[0]!.neverError - 1)).toBeLessThan(0.33);
+  });
+});
+
+test.each([
+  [125, undefined],
+  [126, 69],
+  [130, 30],
+  [150, 12],
+])("a logistic stock of 500 under a catch of %i a year is gone in year %s", (H, year) => {
+  // Source: iteration of N' = N + .5 N (1 - N/1000) - H from 500, first N <= 0 (general-purpose arithmetic); 125 is the largest
+  // sustainable yield rK/4 and keeps 500 for ever.
+  const rule = recurrence("N[t+1] = N + r*N*(1 - N/K) - H");
+  const found = simulate(rule, { constants: { r: 0.5, K: 1000, H }, initial: { N: 500 }, periods: 100 });
+  expect(reaches(found, { value: 0, direction: "falling" }).groups[0]!.firstPeriod).toBe(year);
+});
+
+test.each([
+  ["a catch of 80", "catch = min(B, c)", { c: 80 }, 0.544],
+  ["a catch of 100", "catch = min(B, c)", { c: 100 }, 0.842],
+  ["a sixth less of a share, h .16", "catch = h*B", { h: 0.16 }, 0.23],
+  ["a share h .20", "catch = h*B", { h: 0.2 }, 0.454],
+])("the risk of a stock below 200 in 30 years under %s", (_, line, catchConstants, risk) => {
+  // Source: 200,000 runs in a general-purpose program, printed to a thousandth, stated tolerance .004.
+  const rule = recurrence(`${line}\nB[t+1] = max(B + r*B*(1 - B/K) - catch, 0)`);
+  const found = simulate(rule, {
+    constants: { r: 0.4, K: 1000, ...catchConstants },
+    initial: { B: 600 },
+    periods: 30,
+    noise: { B: { kind: "lognormal", sd: 0.25 } },
+    paths: 200_000,
+    watch: [{ value: 200, direction: "falling" }],
+    seed: 77,
+  });
+  expect(found.groups[0]!.draws.future).toHaveLength(0);
+  const { never } = reaches(found, { value: 200, direction: "falling" }).groups[0]!;
+  expect(Math.abs(1 - never - risk)).toBeLessThan(0.004);
+  expect(() => reaches(found, { value: 210, direction: "falling" })).toThrow(
+    'The paths were too many to keep, and B at 210 was not watched. Run it again with watch: [{ state: "B", value: 210, direction: "falling" }].',
+  );
+});
+
+describe("several flasks", () => {
+  const scatter = [0.02, -0.03, 0.01, 0.025, -0.02, 0.015, -0.01, 0.03, -0.025, 0.005];
+  const flask = (R: number, shift: number): number[] =>
+    scatter.map((_, t) => 5 * R ** t * Math.exp(scatter[(t + shift) % 10]!));
+  const counts = flaskRecord({ A: flask(1.3, 0), B: flask(1.25, 3), C: flask(1.35, 6) });
+  const growth = recurrence("N[t+1] = R*N");
+  const fitted = fit(growth, counts, { errors: "observation", spread: "proportional" });
+  const found = reaches(forecast(fitted, { periods: 12, paths: 500 }), { value: 120, direction: "rising" });
+
+  test("are answered for in one sentence that names the first and the last", () => {
+    expect(found.sentence).toMatch(
+      /^N reaches 120 ×10⁴ cells\/mL first in flask C, at hour \d+\.\d+ \(95% interval \d+\.\d+ to \d+\.\d+\), and last in flask B, at hour \d+\.\d+ \(\d+\.\d+ to \d+\.\d+\); the first recorded hour at which all 3 are at or past it is 15; for a new one, with the scatter between 3 added, the 95% interval is hour /,
+    );
+  });
+
+  test("a new flask's interval has the scatter between flasks added: mean +- t(n - 1) sd sqrt(1 + 1/n)", () => {
+    const times = found.groups.map((group) => group.time!);
+    const mean = (times[0]! + times[1]! + times[2]!) / 3;
+    const sd = Math.sqrt(times.reduce((sum, time) => sum + (time - mean) ** 2, 0) / 2);
+    // Source: t(2) at 0.975 is 4.302653 (handbook table, 4.303).
+    expect(found.across!.newUpper).toBeCloseTo(mean + 4.302653 * sd * Math.sqrt(4 / 3), 4);
+    expect(found.across!.meanUpper).toBeCloseTo(mean + (4.302653 * sd) / Math.sqrt(3), 4);
+    const widest = Math.max(...found.groups.map((group) => group.upper! - group.lower!));
+    expect(found.across!.newUpper - found.across!.newLower).toBeGreaterThan(widest);
+  });
+});
+
+test("between two periods a geometric, an affine and a Beverton-Holt path lie on their closed forms", () => {
+  // Source: the closed forms x0 R^t, x* + (x0 - x*) a^t and K N0/(N0 + (K - N0) R^-t), each at t = 3.37. Tolerance: rounding.
+  const cases = [
+    ["x[t+1] = 1.2*x", 10, 10 * 1.2 ** 3.37],
+    ["x[t+1] = 0.7*x + 30", 10, 100 - 90 * 0.7 ** 3.37],
+    ["x[t+1] = 1.5*x/(1 + 0.5*x/80)", 10, (80 * 10) / (10 + 70 * 1.5 ** -3.37)],
+    ["x[t+1] = x + 4", 10, 10 + 4 * 3.37],
+  ] as const;
+  for (const [text, x, value] of cases) {
+    const found = simulate(recurrence(text), { initial: { x }, periods: 8 });
+    expect(reaches(found, { value, direction: "rising" }).groups[0]!.time).toBeCloseTo(3.37, 9);
+  }
+});
+
+test("questions that cannot be asked are refused", () => {
+  const found = simulate(recurrence("x[t+1] = x + 1"), { initial: { x: 0 }, periods: 3 });
+  expect(() => reaches(found, { state: "y", value: 1, direction: "rising" })).toThrow(
+    'The forecast has no state "y". It has: x.',
+  );
+  expect(() => reaches(found, { value: Number.NaN, direction: "rising" })).toThrow(
+    "The value to reach must be a finite number; NaN was given.",
+  );
+  expect(() => reaches(found, { value: 1, direction: "rising", level: 95 })).toThrow(
+    "An interval has a level between 0 and 1, such as 0.95; 95 was given.",
+  );
+});
