@@ -17,6 +17,11 @@ import { newPause } from "./transport/pause.js";
 import type { Outlet } from "./transport/port-messages.js";
 import { startTransport } from "./transport/start-transport.js";
 
+/** When the first cells have run, what was compiled for them is worth keeping for the next start. */
+const keepAfterMs = 15_000;
+/** Loaded sooner by the first cell that has a string. */
+const languagesAfterMs = 1_000;
+
 /** By this name a package used in cells finds `display`. */
 const displayName: unique symbol = Symbol.for("periodwise.display") as never;
 
@@ -74,10 +79,9 @@ export function runKernel(
   surviveStrayErrors(kernel);
   transport.receive(requestLoop(kernel, reply));
   // The transport thread answers the first requests meanwhile.
-  setImmediate(() => {
-    kernel.session();
-    void kernel.languages();
-  });
+  setImmediate(() => kernel.session());
+  setTimeout(() => void kernel.languages(), languagesAfterMs);
+  setTimeout(() => kernel.session().compiler.keep(), keepAfterMs);
 }
 
 /** Puts what cells may name without an import on the global object, out of sight of enumeration. */

@@ -14,7 +14,7 @@ export interface Conversation {
   readonly end: () => Promise<void>;
 }
 
-const askAgainMs = 200;
+const askAgainMs = 50;
 const patienceMs = 60_000;
 
 /** Starts a kernel and waits until both its replies and its outputs arrive here. */

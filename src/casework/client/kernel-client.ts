@@ -23,13 +23,16 @@ export interface KernelClient {
   readonly close: () => Promise<void>;
 }
 
+/** A kernel that is starting has not bound its sockets yet. */
+const reconnectInterval = 20;
+
 /** Connects to a kernel. The same routing id is used for shell and stdin, so that questions find their way. */
 export function kernelClient(connection: Connection): KernelClient {
   const signature = signatureOf(connection.key, connection.signature_scheme);
   const routingId = randomUUID();
-  const dealer = (): Dealer => new Dealer({ routingId, linger: 0 });
+  const dealer = (): Dealer => new Dealer({ routingId, linger: 0, reconnectInterval });
   const sockets = { shell: dealer(), control: dealer(), stdin: dealer() };
-  const iopub = new Subscriber({ linger: 0, receiveHighWaterMark: 0 });
+  const iopub = new Subscriber({ linger: 0, receiveHighWaterMark: 0, reconnectInterval });
   iopub.subscribe();
   sockets.shell.connect(address(connection, "shell_port"));
   sockets.control.connect(address(connection, "control_port"));

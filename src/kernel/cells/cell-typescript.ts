@@ -1,26 +1,31 @@
 import { createRequire } from "node:module";
-import { dirname, join, parse, relative } from "node:path";
+import { dirname, join } from "node:path";
 import type ts from "typescript-cell";
+import { cellBuilder } from "./cell-builder.js";
 import { cellGlobals, smallNodeGlobals } from "./cell-globals.js";
+import { cellOptions } from "./cell-options.js";
 import { type CellResolution, cellResolution } from "./cell-resolution.js";
+import { compilerLibrary, compilerPath } from "./compiler-library.js";
+import { exportedText } from "./exported-text.js";
 import type { OwnPackage } from "./installation.js";
-import { loopChecks } from "./loop-checks.js";
-import { type PlaceFinder, placeFinder, splitInlineMap } from "./source-places.js";
+import { isInLanguageLibrary, languageLibrary, languageLibraryName } from "./language-library.js";
+import { type SecondStage, secondStage } from "./second-stage.js";
 import { type WatchedFiles, watchedFiles } from "./watched-files.js";
-
-const load = createRequire(__filename);
-const converterPackage = dirname(load.resolve("tslab/package.json"));
-const libraryPath = load.resolve("@tslab/typescript-for-tslab", { paths: [converterPackage] });
 
 /** The compiler as the cell converter gets it, and the doors to what we changed about it. */
 export interface CellTypescript {
   readonly library: typeof ts;
   readonly files: WatchedFiles;
   readonly resolution: CellResolution;
+  readonly finderOf: SecondStage["finderOf"];
   /** From now on cells may name everything that Node declares. */
   readonly addNodeTypes: () => void;
-  /** How places in this generated code lead back to its source; told once. */
-  readonly finderOf: (code: string) => PlaceFinder | undefined;
+  /** From now on the language's own declarations have their docstrings. */
+  readonly addLanguageDocs: () => void;
+  /** Does work on a cell that is to be run, not only looked at. */
+  readonly compiling: <T>(work: () => T) => T;
+  /** Keeps for the next start what makes it faster. */
+  readonly keep: () => void;
 }
 
 /**
@@ -28,100 +33,116 @@ export interface CellTypescript {
  * compiler's exports are getters and assigning to them does nothing.
  */
 export function cellTypescript(folder: string, packages: readonly OwnPackage[]): CellTypescript {
-  const real = load(libraryPath) as typeof ts;
-  const files = watchedFiles(real, folder);
-  const resolution = cellResolution(real, folder, real.sys);
-  const globalsFile = join(folder, "__globals__.d.ts").replaceAll("\\", "/");
-  let nodeTypes = false;
-  const globals = (): string =>
-    cellGlobals + (nodeTypes ? '\n/// <reference types="node" />\n' : smallNodeGlobals);
-  const finders = new Map<string, PlaceFinder>();
+  const { library, keep } = compilerLibrary();
+  const files = watchedFiles(library, folder);
+  const resolution = cellResolution(library, folder, library.sys);
+  const stage = secondStage(library);
+  const texts = virtualTexts(folder);
+  const exported = exportedText(library);
+  const cellFile = inFolder(folder, "__tslab__.ts");
+  let compiles = false;
 
   const altered = {
-    ...real,
+    ...library,
     sys: {
-      ...real.sys,
+      ...library.sys,
       watchFile: files.watchFile,
       watchDirectory: () => ({ close: () => undefined }),
-      readFile: (path: string, encoding?: string) =>
-        path === globalsFile ? globals() : real.sys.readFile(path, encoding),
-      fileExists: (path: string) => path === globalsFile || real.sys.fileExists(path),
+      readFile: (path: string, encoding?: string) => texts.read(path) ?? library.sys.readFile(path, encoding),
+      fileExists: (path: string) => texts.read(path) !== undefined || library.sys.fileExists(path),
     },
-    createWatchCompilerHost: (roots: string[], given: ts.CompilerOptions, ...rest: unknown[]) => {
-      const options = { ...given, ...cellOptions(real, packages) };
-      const host: ts.WatchCompilerHost<ts.BuilderProgram> = Reflect.apply(
-        real.createWatchCompilerHost,
-        undefined,
-        [[...roots, globalsFile], options, ...rest],
+    createWatchCompilerHost: (
+      roots: string[],
+      given: ts.CompilerOptions,
+      sys: ts.System,
+      ...rest: unknown[]
+    ) => {
+      const options = { ...given, ...cellOptions(library, packages) };
+      const [, ...reporters] = rest;
+      const host = library.createWatchCompilerHost(
+        [...roots, texts.globalsFile],
+        options,
+        sys,
+        cellBuilder(library),
+        ...(reporters as [ts.DiagnosticReporter, ts.WatchStatusReporter]),
       );
+      const readFile = host.readFile;
+      host.readFile = (path, encoding) => {
+        const text = readFile(path, encoding);
+        return compiles && path === cellFile && text !== undefined ? exported.of(text) : text;
+      };
       host.resolveModuleNames = (names, from) => resolution.resolve(names, from, options);
       host.hasInvalidatedResolutions = resolution.isForgotten;
       return host;
     },
-    transpileModule: (code: string, options: ts.TranspileOptions) => transpile(real, finders, code, options),
+    transpileModule: stage.transpile,
   };
-  const module = load.cache[libraryPath];
-  if (module) module.exports = altered;
+  // The converter finds this module where it looks for the compiler.
+  const load = createRequire(__filename);
+  load.cache[compilerPath] = { exports: altered, loaded: true } as NodeJS.Module;
   return {
-    library: real,
+    library,
     files,
     resolution,
+    finderOf: stage.finderOf,
     addNodeTypes: () => {
-      if (nodeTypes) return;
-      nodeTypes = true;
-      files.report(globalsFile);
+      if (texts.addNodeTypes()) files.report(texts.globalsFile);
     },
-    finderOf: (code) => {
-      const found = finders.get(code);
-      finders.delete(code);
-      return found;
+    addLanguageDocs: () => {
+      if (texts.addLanguageDocs()) files.report(texts.libraryFile);
     },
+    compiling: (work) => {
+      compiles = true;
+      try {
+        return work();
+      } finally {
+        compiles = false;
+      }
+    },
+    keep,
   };
 }
 
-/** How cells are checked: strictly, and with packages resolved as Node itself resolves them. */
-function cellOptions(library: typeof ts, packages: readonly OwnPackage[]): ts.CompilerOptions {
+/** Files that the compiler reads and that are nowhere on disk. */
+interface VirtualTexts {
+  readonly globalsFile: string;
+  readonly libraryFile: string;
+  readonly read: (path: string) => string | undefined;
+  /** False when they were added before. */
+  readonly addNodeTypes: () => boolean;
+  readonly addLanguageDocs: () => boolean;
+}
+
+function virtualTexts(folder: string): VirtualTexts {
+  const globalsFile = inFolder(folder, "__globals__.d.ts");
+  const libraryFile = inFolder(dirname(compilerPath), languageLibraryName);
+  let language = languageLibrary(compilerPath, false);
+  let nodeTypes = false;
+  let languageDocs = false;
   return {
-    strict: true,
-    checkJs: false,
-    moduleResolution: library.ModuleResolutionKind.Bundler,
-    customConditions: ["node"],
-    ...packagePaths(packages),
-    types: [],
-    typeRoots: [dirname(dirname(load.resolve("@types/node/package.json", { paths: [converterPackage] })))],
-    inlineSourceMap: true,
+    globalsFile,
+    libraryFile,
+    read: (path) => {
+      if (path === globalsFile) {
+        return cellGlobals + (nodeTypes ? '\n/// <reference types="node" />\n' : smallNodeGlobals);
+      }
+      if (path === libraryFile) return language;
+      return isInLanguageLibrary(compilerPath, path) ? "" : undefined;
+    },
+    addNodeTypes: () => {
+      const added = !nodeTypes;
+      nodeTypes = true;
+      return added;
+    },
+    addLanguageDocs: () => {
+      const added = !languageDocs;
+      if (added) language = languageLibrary(compilerPath, true);
+      languageDocs = true;
+      return added;
+    },
   };
 }
 
-/**
- * Where the compiler finds the kernel's own packages, and by what name it writes their types into declarations:
- * a name by path would not do, since the compiler refuses one that leads through another folder's packages.
- */
-function packagePaths(packages: readonly OwnPackage[]): ts.CompilerOptions {
-  const pathsBasePath = parse(__dirname).root.replaceAll("\\", "/");
-  const fromRoot = (path: string): string => relative(pathsBasePath, path).replaceAll("\\", "/");
-  // The first that fits names a file: the package inside another's folder goes before that other.
-  const innerFirst = [...packages].sort((one, other) => other.folder.length - one.folder.length);
-  const entries = innerFirst.flatMap(({ name, types, folder }) => [
-    [name, [fromRoot(types)]],
-    [`${name}/*`, [fromRoot(join(folder, "*"))]],
-  ]);
-  return { pathsBasePath, paths: Object.fromEntries(entries) };
-}
-
-/** The second stage of compilation (to CommonJS), with loop checks, keeping the maps of both stages. */
-function transpile(
-  library: typeof ts,
-  finders: Map<string, PlaceFinder>,
-  code: string,
-  options: ts.TranspileOptions,
-): ts.TranspileOutput {
-  const first = splitInlineMap(code);
-  const compilerOptions = { ...options.compilerOptions, sourceMap: true };
-  const transformers = { before: [loopChecks(library)] };
-  const done = library.transpileModule(first.code, { ...options, compilerOptions, transformers });
-  const outputText = done.outputText.replace(/\n?\/\/# sourceMappingURL=.*\s*$/, "");
-  const maps = [done.sourceMapText, first.map].filter((map) => map !== undefined);
-  finders.set(outputText, placeFinder(maps));
-  return { ...done, outputText };
+function inFolder(folder: string, name: string): string {
+  return join(folder, name).replaceAll("\\", "/");
 }

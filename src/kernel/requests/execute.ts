@@ -20,6 +20,8 @@ interface Execution {
   readonly entry: HistoryEntry | undefined;
 }
 
+const hasString = /["'`]/;
+
 /**
  * Runs one cell.
  * @returns the content of `execute_reply`, once every output of the cell has been published.
@@ -87,7 +89,8 @@ async function outcomeOf(kernel: KernelState, execution: Execution): Promise<Cel
   const { code, run, label } = execution;
   try {
     const session = kernel.session();
-    const refused = stringErrors(session.compiler.library, await kernel.languages(), code);
+    const languages = hasString.test(code) ? await kernel.languages() : [];
+    const refused = stringErrors(session.compiler.library, languages, code);
     const outcome = refused ?? (await session.run(code, cellName(run.serial), label));
     if (outcome.kind === "value" && !run.silent) await show(outcome.value, execution);
     return outcome;
