@@ -9,7 +9,7 @@ export {
   points,
   summary,
 } from "../src/estimate/index.js";
-export type { Check, CheckOptions, Comparison } from "../src/evidence/index.js";
+export type { Check, CheckOptions, CompareOptions, Comparison } from "../src/evidence/index.js";
 export { leastSquares, ModelError } from "../src/numeric/index.js";
 export type { Forecast, ForecastOptions } from "../src/projection/index.js";
 export type {
@@ -39,4 +39,5 @@ export { show } from "./commands/show.js";
 export { frame, type RecordLike, sourceOf } from "./dataframe/index.js";
 export { type Figure, type FigureOptions, figure } from "./figures/index.js";
 export type { Term } from "./glossary/index.js";
+export { type Progress, progress, withProgress } from "./progress/index.js";
 export { type Table, type TableOptions, table } from "./tables/index.js";

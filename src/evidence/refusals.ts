@@ -20,7 +20,8 @@ export function refuseUnlikeErrors(): ModelError {
   return new ModelError(
     "unlike-errors",
     "Fits that put the error in the process and in the observation explain different numbers (steps and values), so " +
-      "their likelihoods cannot be set side by side. Fit every rival with the same { errors }.",
+      "their likelihoods cannot be set side by side. Fit every rival with the same { errors }; check(fit) tells which kind " +
+      "of error the record speaks for.",
   );
 }
 

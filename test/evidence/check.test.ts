@@ -51,7 +51,9 @@ describe("check", () => {
 
   test("refuses fewer than fifty refits", () => {
     const fitted = fit(sheltered, culture, { errors: "observation", spread: "proportional" });
-    expect(() => check(fitted, { refits: 10 })).toThrowErrorMatchingInlineSnapshot(`[ModelError: Recovery needs at least 50 refits to tell a share of intervals; 10 given. Leave { refits } out for 200.]`);
+    expect(() => check(fitted, { refits: 10 })).toThrowErrorMatchingInlineSnapshot(
+      `[ModelError: Recovery needs at least 50 refits to tell a share of intervals; 10 given. Leave { refits } out for 200.]`,
+    );
   });
 });
 

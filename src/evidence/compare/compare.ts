@@ -1,0 +1,133 @@
+import type { Fit } from "../../estimate/index.js";
+import { type RollingOrigin, rollingOrigin } from "../forecasts/rolling-origin.js";
+import { refuseOneFit, refuseUnlikeErrors, refuseUnlikeRecords } from "../refusals.js";
+import { type ComparisonRow, comparisonRows } from "./comparison-row.js";
+import { type ComparisonVerdict, comparisonVerdict } from "./comparison-verdict.js";
+import { type LikelihoodRatio, likelihoodRatios } from "./likelihood-ratio.js";
+
+/** Options of `compare`. */
+export interface CompareOptions {
+  /** Rows from which each rival is fitted afresh and carried forward; default a third of the record, 12 at most. */
+  readonly origins?: number;
+  /** Periods forecast from each; default a tenth of the record. */
+  readonly horizon?: number;
+  /** Level of the forecasts' intervals; default 0.8. */
+  readonly level?: number;
+  /** What the client would be told by a fit; where rivals are not told apart, what each says is set side by side. */
+  readonly decide?: (fit: Fit) => string;
+}
+
+/** What one rival leads to. */
+export interface RivalDecision {
+  readonly rule: string;
+  readonly decision: string;
+}
+
+/** Rivals set side by side on one record. */
+export interface Comparison {
+  readonly kind: "comparison";
+  /** By increasing AICc. */
+  readonly rows: readonly ComparisonRow[];
+  readonly likelihoodRatios: readonly LikelihoodRatio[];
+  /** Undefined where the record is too short to be forecast from its own parts. */
+  readonly rollingOrigin: RollingOrigin | undefined;
+  readonly verdict: ComparisonVerdict;
+  /** What each rule that stands leads to, where `decide` was given. */
+  readonly decisions: readonly RivalDecision[];
+  readonly sentence: string;
+  readonly notes: readonly string[];
+}
+
+/**
+ * Sets fits of rival rules to one record side by side: AICc and weights, likelihood ratios of those nested in each
+ * other, and forecasts from earlier parts of the record against naive ones. Says which is supported, that they cannot be
+ * told apart (AICc within 2), or that none is adequate.
+ *
+ * With groups the AICc of the groups are added, each group having its own constants and sigma. Where the spreads
+ * differ, fits on the log scale are brought to the record's own scale by the Jacobian, -sum ln(y). With `decide`, what
+ * every rule that stands leads to is told, and none is called best.
+ *
+ * @throws {ModelError} `too-few-fits` | `unlike-records` | `unlike-errors`.
+ * @see Burnham, K. P. and Anderson, D. R. (2002), Model Selection and Multimodel Inference, sections 2.4, 2.6, 2.9.
+ * @example compare([crowdingFit, shelteredFit]).verdict.kind; // "supported"
+ */
+export function compare(fits: readonly Fit[], options: CompareOptions = {}): Comparison {
+  const [first] = fits;
+  if (!first || fits.length < 2) throw refuseOneFit(fits.length);
+  for (const other of fits.slice(1)) refuseUnlike(first, other);
+  const scalesDiffer = new Set(fits.map((fit) => fit.options.spread ?? "constant")).size > 1;
+  const rows = comparisonRows(fits, scalesDiffer);
+  const rolled = rollingOrigin(fits, planOf(first, options));
+  const { verdict, sentence } = comparisonVerdict(fits, rows, rolled);
+  const decisions = decisionsOf(fits, verdict, options.decide);
+  return Object.freeze({
+    kind: "comparison",
+    rows: Object.freeze(rows),
+    likelihoodRatios: Object.freeze(likelihoodRatios(fits)),
+    rollingOrigin: rolled,
+    verdict,
+    decisions: Object.freeze(decisions),
+    sentence: [sentence, ...decisionText(verdict, decisions)].join(" "),
+    notes: Object.freeze(notesOf(fits, scalesDiffer, rolled)),
+  });
+}
+
+function planOf(
+  fit: Fit,
+  { origins, horizon, level = 0.8 }: CompareOptions,
+): Parameters<typeof rollingOrigin>[1] {
+  const rows = Math.min(...fit.observations.groups.map((group) => group.index.length));
+  return {
+    origins: origins ?? Math.min(12, Math.round(rows / 3)),
+    horizon: horizon ?? Math.max(1, Math.round(rows / 10)),
+    level,
+  };
+}
+
+function refuseUnlike(first: Fit, other: Fit): void {
+  if (first.options.errors !== other.options.errors) throw refuseUnlikeErrors();
+  const same =
+    first.groups.length === other.groups.length &&
+    first.groups.every((group, g) => {
+      const twin = other.groups[g]!;
+      return (
+        group.count === twin.count &&
+        group.points.every((point, i) => point.observed === twin.points[i]!.observed)
+      );
+    });
+  if (!same) throw refuseUnlikeRecords(first.rule.text, other.rule.text);
+}
+
+function decisionsOf(
+  fits: readonly Fit[],
+  verdict: ComparisonVerdict,
+  decide: CompareOptions["decide"],
+): RivalDecision[] {
+  if (decide === undefined) return [];
+  return verdict.rules.map((rule) => ({
+    rule,
+    decision: decide(fits.find((fit) => fit.rule.text === rule)!),
+  }));
+}
+
+function decisionText({ kind }: ComparisonVerdict, decisions: readonly RivalDecision[]): string[] {
+  if (kind !== "undecided" || decisions.length === 0) return [];
+  const [one] = decisions;
+  if (decisions.every(({ decision }) => decision === one!.decision))
+    return [`Every one of them leads to the same decision: ${one!.decision}`];
+  const each = decisions.map(({ rule, decision }) => `By "${rule}": ${decision}`);
+  return ["They lead to different decisions, and no rule is called best.", ...each];
+}
+
+function notesOf(fits: readonly Fit[], scalesDiffer: boolean, rolled: RollingOrigin | undefined): string[] {
+  const notes = ["AICc counts sigma and uses RSS/n; lower is better."];
+  if (scalesDiffer)
+    notes.push("The fits stand on different scales: those on the log scale are brought back by -sum ln(y).");
+  if (fits.some((fit) => fit.groups.length > 1))
+    notes.push("AICc added over the groups, each with its own constants and sigma.");
+  if (rolled === undefined)
+    notes.push(
+      "The record is too short to be forecast from its own earlier parts, or the fits are not of least squares.",
+    );
+  return notes;
+}

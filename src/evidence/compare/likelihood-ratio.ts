@@ -1,0 +1,70 @@
+import type { Fit } from "../../estimate/index.js";
+import { chiSquareCdf } from "../../numeric/index.js";
+import { nestingOf } from "./nesting.js";
+
+/** Whether constants that a smaller rule leaves out are worth having. */
+export interface LikelihoodRatio {
+  readonly smaller: string;
+  readonly larger: string;
+  /** Constants of the larger rule, and the value at which it becomes the smaller. */
+  readonly at: Readonly<Record<string, number>>;
+  /** Twice the difference of log-likelihoods. */
+  readonly statistic: number;
+  readonly degreesOfFreedom: number;
+  /** Undefined where the conditions of the chi-square distribution do not hold. */
+  readonly probability: number | undefined;
+  readonly sentence: string;
+}
+
+/**
+ * Likelihood-ratio tests of every pair of fits of which one is a special case of the other.
+ *
+ * No probability is given where the value at which the larger rule becomes the smaller lies on the edge of its admitted
+ * range, since the statistic is not chi-square distributed there.
+ *
+ * @see Wilks, S. S. (1938), Annals of Mathematical Statistics 9; on the edge Self, S. G. and Liang, K.-Y. (1987),
+ *   Journal of the American Statistical Association 82.
+ */
+export function likelihoodRatios(fits: readonly Fit[]): readonly LikelihoodRatio[] {
+  return fits.flatMap((smaller) =>
+    fits.flatMap((larger) => {
+      if (smaller === larger || smaller.options.spread !== larger.options.spread) return [];
+      const nesting = nestingOf(smaller, larger);
+      return nesting ? [ratioOf(smaller, larger, nesting.at)] : [];
+    }),
+  );
+}
+
+function ratioOf(smaller: Fit, larger: Fit, at: Readonly<Record<string, number>>): LikelihoodRatio {
+  const total = (fit: Fit): number =>
+    fit.groups.reduce((sum, group) => sum + group.criteria.logLikelihood, 0);
+  const statistic = Math.max(0, 2 * (total(larger) - total(smaller)));
+  const names = Object.keys(at);
+  const degreesOfFreedom = names.length * larger.groups.length;
+  const bounds = { ...larger.rule.bounds, ...larger.options.bounds };
+  const edge = names.filter((name) => bounds[name]?.includes(at[name]!));
+  const probability = edge.length > 0 ? undefined : 1 - chiSquareCdf(statistic, degreesOfFreedom);
+  const base = {
+    smaller: smaller.rule.text,
+    larger: larger.rule.text,
+    at,
+    statistic,
+    degreesOfFreedom,
+    probability,
+  };
+  return { ...base, sentence: sentenceOf(base, edge) };
+}
+
+function sentenceOf(ratio: Omit<LikelihoodRatio, "sentence">, edge: readonly string[]): string {
+  const where = Object.entries(ratio.at)
+    .map(([name, value]) => `${name} = ${value}`)
+    .join(", ");
+  const nested = `"${ratio.smaller}" is "${ratio.larger}" at ${where}`;
+  const numbers = `likelihood ratio ${ratio.statistic.toFixed(2)} on ${ratio.degreesOfFreedom}`;
+  if (ratio.probability === undefined)
+    return `${nested} (${numbers}); that lies on the edge of the range of ${edge.join(", ")}, so the chi-square distribution does not hold and no probability is given.`;
+  const p = ratio.probability < 0.001 ? "p below 0.001" : `p ${ratio.probability.toFixed(3)}`;
+  return ratio.probability < 0.05
+    ? `${nested}; the record asks for more (${numbers}, ${p}).`
+    : `${nested}; the record does not ask for more (${numbers}, ${p}).`;
+}
