@@ -40,4 +40,11 @@ export { frame, type RecordLike, sourceOf } from "./dataframe/index.js";
 export { type Figure, type FigureOptions, figure } from "./figures/index.js";
 export type { Term } from "./glossary/index.js";
 export { type Progress, progress, withProgress } from "./progress/index.js";
-export { type Table, type TableOptions, table } from "./tables/index.js";
+export {
+  type NumberFormat,
+  numberFormat,
+  type Table,
+  type TableOptions,
+  table,
+  tabSeparated,
+} from "./tables/index.js";

@@ -6,6 +6,7 @@ import {
   type GroupForecast,
 } from "../../src/projection/index.js";
 import { type Figure, fanFigure, type ProjectedSeries } from "../figures/index.js";
+import { withProgress } from "../progress/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
@@ -19,7 +20,9 @@ import { shownTogether } from "./shown-together.js";
  * @example forecast(fitted, { periods: 20 });
  */
 export function forecast(fit: Fit, options: ForecastOptions): Forecast {
-  const ahead = forecastFit(fit, { seed: caseLog.seed(), ...options });
+  const ahead = withProgress("Forecast", undefined, ({ at }) =>
+    forecastFit(fit, { seed: caseLog.seed(), onProgress: at, ...options }),
+  );
   caseLog.noteStep(
     `forecast "${fit.rule.text}" over ${options.periods} periods, ${ahead.options.paths} paths`,
   );

@@ -55,8 +55,8 @@ export interface Table {
 export interface TableOptions {
   readonly title: string;
   readonly columns: readonly Column[];
-  readonly rows: readonly Readonly<Record<string, unknown>>[];
-  readonly totals?: readonly Readonly<Record<string, unknown>>[];
+  readonly rows: readonly object[];
+  readonly totals?: readonly object[];
   readonly notes?: readonly (string | Footnote)[];
   /** Default 40. */
   readonly limit?: number;
@@ -78,14 +78,17 @@ export function table(options: TableOptions): Table {
     kind: "table",
     title: options.title,
     columns: Object.freeze([...options.columns]),
-    rows: Object.freeze([...options.rows]),
-    totals: Object.freeze([...(options.totals ?? [])]),
+    rows: Object.freeze([...options.rows] as Row[]),
+    totals: Object.freeze([...(options.totals ?? [])] as Row[]),
     notes: Object.freeze([...(options.notes ?? [])]),
     limit: Math.max(1, options.limit ?? 40),
     format: Object.freeze({ ...numberFormat(), ...options.format }),
   };
   return showing(made, () => ({ "text/html": tableHtml(made), "text/plain": tableText(made) }));
 }
+
+/** Any object can be read by key; what it lacks is an absent value. */
+type Row = Readonly<Record<string, unknown>>;
 
 function checkColumns(columns: readonly Column[], title: string): void {
   if (columns.length === 0) throw noColumns(title);

@@ -1,0 +1,58 @@
+import { type Bundle, escapeHtml, look, oneLine, typeface } from "../tables/index.js";
+
+/** Where progress is seen, and how it is told to stop. */
+export interface ProgressPlace {
+  /** Seconds on any clock that only goes forward. */
+  readonly now: () => number;
+  /** Replaces the line last shown. `share` is the part that is done, undefined when unknown or when it is over. */
+  readonly show: (line: string, share: number | undefined, last: boolean) => void;
+  /** Whether the analyst has asked for the work to stop. */
+  readonly interrupted: () => boolean;
+}
+
+type Display = (bundle: Bundle, options: { display_id: string; update?: boolean }) => void;
+
+let displays = 0;
+
+/** The notebook when a kernel offers one, else the terminal. */
+export function presentPlace(): ProgressPlace {
+  const offered = globalThis as { [name: symbol]: unknown };
+  const display = offered[Symbol.for("periodwise.display")];
+  const question = offered[Symbol.for("periodwise.interrupt")];
+  return {
+    now: () => performance.now() / 1000,
+    show: typeof display === "function" ? inNotebook(display as Display) : inTerminal(process.stderr),
+    interrupted: () => typeof question === "function" && question() === true,
+  };
+}
+
+/** One display that is updated in place. */
+function inNotebook(display: Display): ProgressPlace["show"] {
+  const display_id = `periodwise-progress-${process.pid}-${++displays}`;
+  let shown = false;
+  return (line, share) => {
+    display(
+      { "text/plain": oneLine(line), "text/html": lineHtml(line, share) },
+      { display_id, update: shown },
+    );
+    shown = true;
+  };
+}
+
+/** One line that is written over; where the output is a file, only what stays. */
+function inTerminal(out: NodeJS.WriteStream): ProgressPlace["show"] {
+  return (line, _share, last) => {
+    if (out.isTTY) out.write(`\r\u001b[2K${oneLine(line).slice(0, out.columns - 1)}${last ? "\n" : ""}`);
+    else if (last) out.write(`${oneLine(line)}\n`);
+  };
+}
+
+function lineHtml(line: string, share: number | undefined): string {
+  const text = `font-family:${typeface};font-size:13px;color:${look.quiet};margin:.3em 0`;
+  const percent = share === undefined ? 0 : Math.round(100 * share);
+  const bar =
+    share === undefined
+      ? ""
+      : `;padding:.25em .6em;max-width:40em;border:1px solid ${look.line};background:linear-gradient(90deg,#d3e4e2 ${percent}%,${look.paper} ${percent}%)`;
+  return `<div class="pw-progress" role="status" dir="auto" style="${text}${bar}">${escapeHtml(line)}</div>`;
+}
