@@ -1,3 +1,6 @@
+import { cpSync, mkdtempSync } from "node:fs";
+import { tmpdir } from "node:os";
+import { join } from "node:path";
 import {
   fit,
   forecast,
@@ -18,7 +21,11 @@ export function scope(): Promise<Readonly<Record<string, unknown>>> {
 }
 
 async function make(): Promise<Readonly<Record<string, unknown>>> {
-  process.chdir(`${import.meta.dirname}/../../notebooks`);
+  const folder = mkdtempSync(join(tmpdir(), "periodwise-examples-"));
+  cpSync(join(import.meta.dirname, "..", "..", "notebooks", "data"), join(folder, "data"), {
+    recursive: true,
+  });
+  process.chdir(folder);
   openCase({ title: "Examples", question: "Do they run?", domain: "cultures", seed: 7 });
   const readings = await readRecord("data/algae-line-3.csv");
   readings.addColumn("density", readings["reading"].sub(readings["blank"]), { inplace: true });
