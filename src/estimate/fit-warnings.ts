@@ -1,5 +1,10 @@
 import type { Warning } from "../numeric/index.js";
+import { type Rule, roughness } from "../rule/index.js";
+import type { Estimate } from "./estimate-of.js";
+import type { FitOptions } from "./fit-options.js";
 import type { GroupFit } from "./group-fit.js";
+import type { Optimum } from "./optimum.js";
+import { slopeWarnings } from "./slope-warnings.js";
 import type { Unknowns } from "./unknowns.js";
 
 /** Usable values a constant below which a fit carries a caution: common practice, no source. */
@@ -7,13 +12,25 @@ const comfortable = 8;
 /** Correlation of two estimates above which they are named as hard to separate: common practice, no source. */
 const strong = 0.99;
 
+/** What a fit's warnings are drawn from. */
+export interface FitContext {
+  readonly rule: Rule;
+  readonly options: FitOptions;
+  readonly unknowns: Unknowns;
+  readonly found: Optimum;
+}
+
 /** What a reader of the fit must know, besides its numbers. */
-export function fitWarnings(fit: Omit<GroupFit, "warnings">, unknowns: Unknowns): readonly Warning[] {
+export function fitWarnings(fit: Omit<GroupFit, "warnings">, context: FitContext): readonly Warning[] {
   return [
     ...stopWarning(fit),
-    ...undetermined(fit),
-    ...atBounds(fit, unknowns),
+    ...undetermined(fit, context),
+    ...spreadsNotSeparated(fit),
+    ...atBounds(fit, context.unknowns),
+    ...rivals(fit),
     ...correlated(fit),
+    ...bends(context.rule),
+    ...slopeWarnings(fit, context),
     ...fewValues(fit),
   ];
 }
@@ -29,14 +46,38 @@ function stopWarning(fit: Omit<GroupFit, "warnings">): Warning[] {
   ];
 }
 
-function undetermined(fit: Omit<GroupFit, "warnings">): Warning[] {
-  return fit.estimates
-    .filter((estimate) => estimate.standardError === undefined)
-    .map((estimate) => ({
-      code: "not-determined",
-      message: `${estimate.name} is not determined by this record${estimate.profile.note && ` (${estimate.profile.note})`}.`,
-    }));
+function undetermined(fit: Omit<GroupFit, "warnings">, { found }: FitContext): Warning[] {
+  const loose = fit.estimates.filter((each) => each.standardError === undefined && each.role !== "spread");
+  const together = loose.filter((each) => !found.separable[fit.estimates.indexOf(each)]);
+  const combination =
+    together.length > 1
+      ? `only a combination of ${together.map(({ name }) => name).join(" and ")} enters`
+      : "no value of it changes the fit";
+  return loose.map((each) => ({
+    code: "not-determined",
+    message: `${each.name} is not determined by this record (${together.includes(each) ? combination : each.profile.note || "its profile has no limit"}).`,
+  }));
 }
+
+/** The split of process and observation error, or a dispersion, that the record leaves open. */
+function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">): Warning[] {
+  const loose = fit.estimates.filter((each) => each.role === "spread" && each.standardError === undefined);
+  if (loose.length === 0) return [];
+  const limits = loose.map(
+    ({ name, profile }) => `${name} from ${shown(profile.lower, "0")} to ${shown(profile.upper, "no limit")}`,
+  );
+  const both = fit.filter !== undefined || fit.estimates.some(({ name }) => name.startsWith("process error"));
+  return [
+    {
+      code: both ? "errors-not-separated" : "not-determined",
+      message: both
+        ? `The record separates the two errors only weakly (${limits.join("; ")}). Give the reading's standard deviation with { spread: { sd } } if replicates tell it.`
+        : `The record gives no two-sided interval: ${limits.join("; ")}.`,
+    },
+  ];
+}
+
+const shown = (limit: number | undefined, none: string): string => limit?.toPrecision(3) ?? none;
 
 function atBounds(fit: Omit<GroupFit, "warnings">, unknowns: Unknowns): Warning[] {
   return fit.estimates
@@ -47,20 +88,46 @@ function atBounds(fit: Omit<GroupFit, "warnings">, unknowns: Unknowns): Warning[
     }));
 }
 
+function rivals(fit: Omit<GroupFit, "warnings">): Warning[] {
+  if (fit.rivals.length === 0) return [];
+  const told = fit.rivals.map(({ estimates, behind }) => {
+    const values = estimates.map((value, i) => `${fit.estimates[i]!.name} ${value.toPrecision(4)}`);
+    return `${values.join(", ")} (${behind.toFixed(2)} log-likelihood units behind)`;
+  });
+  return [
+    {
+      code: "two-optima",
+      message: `Different constants explain the record almost equally: ${told.join("; ")}. Give { start } or { bounds } if one can be ruled out.`,
+    },
+  ];
+}
+
 function correlated(fit: Omit<GroupFit, "warnings">): Warning[] {
   const size = fit.estimates.length;
-  const found: Warning[] = [];
-  for (let a = 0; a < size; a++)
-    for (let b = a + 1; b < size; b++) {
-      const scale = fit.covariance[a * size + a]! * fit.covariance[b * size + b]!;
-      const correlation = fit.covariance[a * size + b]! / Math.sqrt(scale);
-      if (Math.abs(correlation) > strong)
-        found.push({
-          code: "strong-correlation",
-          message: `${fit.estimates[a]!.name} and ${fit.estimates[b]!.name} are hard to separate (correlation ${correlation.toFixed(3)}): their combination is known better than either.`,
-        });
-    }
-  return found;
+  const pairs = fit.estimates.flatMap((a, i) =>
+    fit.estimates.slice(i + 1).map((b, k) => [a, b, i, i + 1 + k] as const),
+  );
+  const entry = (i: number, j: number): number => fit.covariance[i * size + j]!;
+  return pairs
+    .map(([a, b, i, j]) => ({ a, b, correlation: entry(i, j) / Math.sqrt(entry(i, i) * entry(j, j)) }))
+    .filter(({ correlation }) => Math.abs(correlation) > strong)
+    .map(({ a, b, correlation }) => ({
+      code: "strong-correlation",
+      message: `${pair(a, b)} are hard to separate (correlation ${correlation.toFixed(3)}): their combination is known better than either.`,
+    }));
+}
+
+const pair = (a: Estimate, b: Estimate): string => `${a.name} and ${b.name}`;
+
+function bends(rule: Rule): Warning[] {
+  const [bend] = roughness(rule).kinks;
+  if (bend === undefined) return [];
+  return [
+    {
+      code: "rule-bends",
+      message: `The rule bends at ${bend.function}(...): where a fit sits on the bend its standard errors do not hold. Read the profiles.`,
+    },
+  ];
 }
 
 function fewValues(fit: Omit<GroupFit, "warnings">): Warning[] {

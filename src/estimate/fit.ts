@@ -39,7 +39,7 @@ export interface Fit {
  * @see Bates, D. M. and Watts, D. G. (1988), Nonlinear Regression Analysis and Its Applications, chapters 2 and 6.
  * @example
  * const crowding = recurrence("ΔN = r*N*(1 - N/K)");
- * const counts = observations({ hour: [0, 1, 2, 3, 4, 5, 6], N: [10, 18, 31, 50, 69, 85, 93] }, { period: "hour" });
+ * const counts = observations({ hour: [0, 1, 2, 3, 4, 5, 6], N: [10, 18, 31, 50, 69, 85, 93] }, { period: "hour", step: { every: 1, of: "hour" }, value: "N" });
  * fit(crowding, counts, { errors: "observation" }).groups[0].stop.kind; // "converged"
  */
 export function fit(rule: Rule, observations: Observations, options: FitOptions): Fit {

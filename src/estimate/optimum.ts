@@ -16,6 +16,8 @@ export interface Optimum {
   /** [unknowns, unknowns]; NaN where not determined. */
   readonly covariance: Float64Array;
   readonly determined: readonly boolean[];
+  /** False where the values compared do not change along some direction that moves the unknown. */
+  readonly separable: readonly boolean[];
   /** Further optima within 2 log-likelihood units of this one. */
   readonly rivals: readonly Lowest[];
 }
@@ -41,7 +43,15 @@ export function optimum(
   const unscaled = objective.covariance(at);
   const covariance = unscaled.covariance.map((value) => value * cut.variance);
   const rivals = rivalsOf(best, searches, 4 * cut.variance);
-  const base = { at, value: best.value, stop: best.stop, cut, covariance, rivals };
+  const base = {
+    at,
+    value: best.value,
+    stop: best.stop,
+    cut,
+    covariance,
+    separable: unscaled.determined,
+    rivals,
+  };
   if (!withProfiles) return { ...base, profiles: undefined, determined: unscaled.determined };
   const problem = { objective, estimates: at, value: best.value, lower, upper, ...cut };
   const profiles = unknowns.names.map((_, i) => {

@@ -42,7 +42,12 @@ const outOfIterations: StopReason = Object.freeze({ kind: "iteration-limit" });
  * @param start - [size]; moved onto the nearest bound where it lies outside.
  * @see Moré (1978), The Levenberg-Marquardt algorithm: implementation and theory; the stop on the residuals'
  *   part along the Jacobian is the relative offset of Bates and Watts (1981), Technometrics 23:179.
- * @example const { stop } = minimiseSquares(system, Float64Array.of(1, 0.5)); // stop.kind === "converged"
+ * @example
+ * // Two residuals, c - 3 and 2 c - 4: R = sqrt(5), R'z = (c - 3) + 2 (2 c - 4), and the best c is 11/5.
+ * const triangle = Float64Array.of(Math.sqrt(5)), projected = Float64Array.of(0);
+ * const evaluate = (at) => (at[0] - 3) ** 2 + (2 * at[0] - 4) ** 2;
+ * const linearise = (at) => { projected[0] = (5 * at[0] - 11) / triangle[0]; return true; };
+ * minimiseSquares({ size: 1, triangle, projected, evaluate, linearise }, Float64Array.of(0)).estimates[0]; // 2.2
  */
 export function minimiseSquares(
   system: LinearisedSystem,
