@@ -17,7 +17,8 @@ import { caseLog } from "./case-log.js";
  * @returns a new frame; the one given is not changed.
  * @throws {ModelError} `no-such-row` | `missing-column` | `reason-missing`.
  * @example
- * const checked = correct(readings, { row: 14, column: "payment", now: 447, why: "35.00 fee paid with it", who: "A. K." });
+ * const checked = correct(readings, { row: 4, column: "reading", now: null, why: "flask shaken", who: "A. K." });
+ * checked.columns.at(-1) // "reading (corrected)"
  */
 export function correct(record: RecordLike, correction: Correction): DataFrame {
   const corrected = correctTable(columnsOf(record), correction);
@@ -29,7 +30,7 @@ export function correct(record: RecordLike, correction: Correction): DataFrame {
  * Takes back the last correction of a record, or the last one of a row.
  *
  * @throws {ModelError} `no-decision` when there is none.
- * @example const asRead = undo(checked);
+ * @example undo(correct(readings, { row: 4, why: "flask shaken" })).columns.length // readings.columns.length
  */
 export function undo(record: RecordLike, row?: number): DataFrame {
   const before = columnsOf(record);
@@ -48,7 +49,7 @@ export interface DecisionsLog {
 /**
  * The decisions log of a record or of observations: row, column, what was read, what is used, why, and who.
  *
- * @example decisionsLog(checked);
+ * @example decisionsLog(correct(readings, { row: 4, why: "flask shaken" })).decisions.length // 1
  */
 export function decisionsLog(record: RecordLike | Observations): DecisionsLog {
   const isObserved = (record as Partial<Observations>).kind === "observations";

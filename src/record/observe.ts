@@ -6,6 +6,7 @@ import { decided, rowsLeftOut } from "./decisions/correct.js";
 import { type FindingLog, findingLog } from "./finding-log.js";
 import type { ObservationOptions } from "./observation-options.js";
 import type { Observations, ObservedGroup } from "./observations.js";
+import { noteMonthEnds } from "./period/note-month-ends.js";
 import { noteSteps } from "./period/note-steps.js";
 import { type PeriodAxis, periodAxis } from "./period/period-axis.js";
 import { inputsOf, readColumns } from "./read-columns.js";
@@ -51,6 +52,7 @@ export function observations(table: ColumnTable, options: ObservationOptions): O
   const kept = groups.filter(({ group }) => group.index.length > 0).map(({ group }) => group);
   if (kept.length === 0) throw noUsableRows(taken.length);
   noteSteps(kept, axis, log);
+  noteMonthEnds(kept, axis, log);
   const { identities, measured = "level" } = options;
   if (identities)
     checkIdentities(

@@ -19,7 +19,9 @@ export interface Correction {
  * Adds a correction to a record. The cells stay as they were read; what is used instead stands in `decisions`.
  *
  * @throws {ModelError} `no-such-row` | `missing-column` | `reason-missing`.
- * @example correct(table, { row: 14, column: "payment", now: 447, why: "fee of 35.00 paid with it" });
+ * @example
+ * const loan = tableOf({ month: [1, 2], paid: [412, 447] });
+ * correct(loan, { row: 2, column: "paid", now: 412, why: "35.00 of it was a fee" }).decisions.length // 1
  */
 export function correct(table: ColumnTable, correction: Correction): ColumnTable {
   const { row, column = "", now = null, why, who = "" } = correction;

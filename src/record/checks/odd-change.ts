@@ -1,0 +1,21 @@
+import { type CheckedSeries, noteValue, periodOf } from "./checked-series.js";
+import { standsOut } from "./stands-out.js";
+
+/** Larger jumps are a matter of units. */
+const largest = Math.log(4);
+
+/** A change unlike those before and after it, in a level that otherwise changes evenly: a fee, a late entry, a feed. */
+export function oddChange(series: CheckedSeries): void {
+  const { values, measured, group } = series;
+  if (measured !== "level" || !values.every((value) => value > 0)) return;
+  const rates = Array.from(
+    values.subarray(1),
+    (value, i) => Math.log(value / values[i]!) / (group.index[i + 1]! - group.index[i]!),
+  );
+  for (const i of standsOut(rates)) {
+    if (Math.abs(rates[i]!) > largest) continue;
+    const change = Number((values[i + 1]! - values[i]!).toPrecision(6));
+    const message = `${periodOf(series, i + 1)}: the change ${change} from ${values[i]} to ${values[i + 1]} is unlike the changes before and after it.`;
+    noteValue(series, i + 1, "odd-change", message);
+  }
+}
