@@ -1,5 +1,6 @@
 export { type Draws, type DrawsOptions, draws } from "./draws.js";
 export { type Equilibria, type EquilibriaOptions, type Equilibrium, equilibria } from "./equilibria.js";
+export { type ExactPath, type ExactPathOptions, type ExactValue, exactPath } from "./exact/exact-path.js";
 export type { HeldSetting } from "./held-step.js";
 export type { InputValues } from "./input-columns.js";
 export type { Multiplier } from "./multiplier.js";

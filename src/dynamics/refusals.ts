@@ -67,3 +67,27 @@ export function changesWithTime(what: string): ModelError {
     `The rule reads the period index t, so it has no ${what} that stays. Hold t by writing its value as a constant.`,
   );
 }
+
+export function noRationalValue(what: string): ModelError {
+  return new ModelError(
+    "no-rational-value",
+    `The rule needs ${what}, which has no exact fraction. Use path instead, which works in computer numbers.`,
+    { what },
+  );
+}
+
+export function tooManyDigits(period: number, limit: number): ModelError {
+  return new ModelError(
+    "too-many-digits",
+    `At period ${period} the exact value has more than ${limit} digits. Ask for fewer periods, or use path.`,
+    { period, limit },
+  );
+}
+
+export function outsideRange(title: string, condition: string, values: string): ModelError {
+  return new ModelError(
+    "outside-range",
+    `${title} means what it says only where ${condition}; given were ${values}. Choose values inside the range, or write the rule out with recurrence to run it regardless.`,
+    { condition },
+  );
+}

@@ -1,0 +1,59 @@
+import { type Algebra, evaluatorOver } from "./graph/evaluate-over.js";
+import { graphOrder } from "./graph/graph-order.js";
+import { type Interval, outward } from "./graph/interval.js";
+import { intervalOperations } from "./graph/interval-operations.js";
+import type { Node } from "./graph/node.js";
+import { stepDerivatives } from "./graph/step-derivatives.js";
+import type { Rule } from "./rule.js";
+import { ruleDefinition } from "./rule-definition.js";
+
+/** Values that a step reads, in some algebra; each role by slot. */
+export interface PlaceOver<T> {
+  readonly state: readonly T[];
+  readonly constants: readonly T[];
+  /** Value of an input some periods from t. */
+  readonly input: (slot: number, offset: number) => T;
+  readonly t: T;
+}
+
+/** Steps of a rule in another algebra. */
+export interface StepOver<T> {
+  /** The next state vector. */
+  readonly next: (place: PlaceOver<T>) => readonly T[];
+  /** Its slopes [slot][slot] by the present one. */
+  readonly slopes: (place: PlaceOver<T>) => readonly (readonly T[])[];
+}
+
+/** Makes a rule ready to be stepped in another algebra. */
+export function stepOver<T>(rule: Rule, algebra: Algebra<T>): StepOver<T> {
+  const { graph } = ruleDefinition(rule);
+  const width = graph.states;
+  const next = evaluatorOver(graph.next, algebra);
+  const slopes = evaluatorOver(stepDerivatives(graph).byState.flat(), algebra);
+  const leafAt =
+    (place: PlaceOver<T>) =>
+    (leaf: Extract<Node, { kind: "leaf" }>): T => {
+      if (leaf.role === "state") return place.state[leaf.slot]!;
+      if (leaf.role === "constant") return place.constants[leaf.slot]!;
+      return leaf.role === "period" ? place.t : place.input(leaf.slot, leaf.offset);
+    };
+  return {
+    next: (place) => next(leafAt(place)),
+    slopes: (place) => {
+      const values = slopes(leafAt(place));
+      return Array.from({ length: width }, (_, i) => values.slice(width * i, width * (i + 1)));
+    },
+  };
+}
+
+/** Intervals as numbers: every result holds what the exact one could be. */
+export const intervalAlgebra: Algebra<Interval> = {
+  number: (value) => (Number.isInteger(value) ? [value, value] : outward(value, value)),
+  operations: intervalOperations,
+};
+
+/** Whether the next state is a fixed linear function of the present one: no slope reads a state, an input or t. */
+export function isLinearInStates(rule: Rule): boolean {
+  const slopes = stepDerivatives(ruleDefinition(rule).graph).byState.flat();
+  return graphOrder(slopes).every((node) => node.kind !== "leaf" || node.role === "constant");
+}
