@@ -23,7 +23,7 @@ export interface Optimum {
 }
 
 /** How many starting points are tried before the lowest optimum is taken. */
-const tries = 4;
+const tries = 5;
 /** Rivals closer than this, relative, are the same optimum. */
 const same = 1e-4;
 

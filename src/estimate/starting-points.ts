@@ -56,12 +56,22 @@ function candidates(
   const best = ranked(trials, step.rows, kept);
   const better = polished(best, step, stepUnknowns);
   if (options.errors === "process") return better.map((point) => point.at);
-  const starts = [...better, ...best].map((point) => withInitial(point.at, unknowns, group, options));
-  return ranked(starts, rows, kept).map((point) => point.at);
+  const carried = (at: Float64Array): Float64Array => withInitial(at, unknowns, group, options);
+  // A one-step fit can run off where the trajectory has its optimum, so trial points stay in the choice as they are.
+  const direct = ranked(trials.map(carried), rows, 3);
+  const stepped = ranked(
+    better.map((point) => carried(point.at)),
+    rows,
+    kept - 3,
+  );
+  return sorted([...stepped, ...direct]).map((point) => point.at);
 }
 
+/** The best of several points; of points with the same sum only one. */
 function ranked(points: readonly Float64Array[], rows: FitRows, keep: number): Point[] {
-  return sorted(points.map((at) => ({ at, sum: sumOfSquaresAt(rows, at) }))).slice(0, keep);
+  const all = sorted(points.map((at) => ({ at, sum: sumOfSquaresAt(rows, at) })));
+  const distinct = all.filter(({ sum }, i) => i === 0 || sum > all[i - 1]!.sum * (1 + 1e-6));
+  return distinct.slice(0, keep);
 }
 
 function polished(points: readonly Point[], { system }: Prepared, { lower, upper }: Unknowns): Point[] {
