@@ -1,8 +1,13 @@
+export { type ClosedForm, type ClosedFormOptions, closedForm, closedFormAt } from "./closed-form.js";
 export { type Draws, type DrawsOptions, draws } from "./draws.js";
 export { type Equilibria, type EquilibriaOptions, type Equilibrium, equilibria } from "./equilibria.js";
 export { type ExactPath, type ExactPathOptions, type ExactValue, exactPath } from "./exact/exact-path.js";
+export { type GuaranteedDigits, type GuaranteedOptions, guaranteedDigits } from "./guaranteed-digits.js";
 export type { HeldSetting } from "./held-step.js";
 export type { InputValues } from "./input-columns.js";
+export type { ClosedTerm } from "./linear/closed-terms.js";
+export type { ClosedRoot } from "./linear/polynomial-roots.js";
+export { type MatrixGrowth, matrixGrowth } from "./matrix-growth.js";
 export type { Multiplier } from "./multiplier.js";
 export { type Path, type PathOptions, type PathStop, path } from "./path.js";
 export type { SearchRange } from "./search-range.js";

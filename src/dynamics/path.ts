@@ -2,6 +2,7 @@ import { compileRule, explainFailure, quantitiesAt, type Rule, type StepPlace } 
 import { type InputValues, inputColumns } from "./input-columns.js";
 import { unreadableOption } from "./refusals.js";
 import { constantsBySlot, type InitialValues, initialVector } from "./setting.js";
+import { namedValues, refuseOutsideRange } from "./valid-range.js";
 
 export interface PathOptions {
   /** By constant; those the rule holds fixed may be left out. */
@@ -19,7 +20,9 @@ export interface PathOptions {
 export type PathStop =
   | { readonly kind: "complete" }
   /** The step into this absolute period has no finite value; the path ends one period before. */
-  | { readonly kind: "left-finite-range"; readonly period: number; readonly reason: string };
+  | { readonly kind: "left-finite-range"; readonly period: number; readonly reason: string }
+  /** The value in this absolute period lies outside the rule's bounds; the path ends with it. */
+  | { readonly kind: "left-bounds"; readonly period: number; readonly reason: string };
 
 /** One path of a rule. */
 export interface Path {
@@ -52,15 +55,44 @@ function placeAt(run: Run, row: number): StepPlace {
   return { state, constants: run.constants, inputs: run.inputs, t: run.from + row };
 }
 
-function stopOf(run: Run, periods: number): { readonly rows: number; readonly stop: PathStop } {
+interface End {
+  readonly rows: number;
+  readonly stop: PathStop;
+}
+
+/** Where a value first leaves the finite range, if it does; the path ends one row before. */
+function leavesFinite(run: Run): End | undefined {
   const bad = run.table.findIndex((value) => !Number.isFinite(value));
-  if (bad < 0) return { rows: periods + 1, stop: { kind: "complete" } };
+  if (bad < 0) return undefined;
   const rows = Math.floor(bad / run.width);
   const period = run.from + rows;
   const failure = explainFailure(run.rule, placeAt(run, rows - 1));
   const cause = failure === undefined ? "" : `: ${failure.reason}`;
   const reason = `The rule leaves the finite range at period ${period}${cause}.`;
   return { rows, stop: { kind: "left-finite-range", period, reason } };
+}
+
+/** Where a state first leaves its bounds among the first rows, if it does; the path ends with that row. */
+function leavesBounds(run: Run, rows: number): End | undefined {
+  const bounded = run.rule.states.flatMap((name, slot) => {
+    const range = run.rule.bounds[name];
+    return range === undefined ? [] : [{ name, slot, range }];
+  });
+  for (let row = 1; row < rows && bounded.length > 0; row++) {
+    for (const { name, slot, range } of bounded) {
+      const value = run.table[row * run.width + slot]!;
+      if (value >= range[0] && value <= range[1]) continue;
+      const period = run.from + row;
+      const reason = `${name} leaves its bounds ${range[0]} to ${range[1]} at period ${period}, with ${value}; further values would mean nothing.`;
+      return { rows: row + 1, stop: { kind: "left-bounds", period, reason } };
+    }
+  }
+  return undefined;
+}
+
+function stopOf(run: Run, periods: number): End {
+  const end = leavesFinite(run) ?? { rows: periods + 1, stop: { kind: "complete" } };
+  return leavesBounds(run, end.rows) ?? end;
 }
 
 function quantityColumns(run: Run, rows: number): Readonly<Record<string, Float64Array>> {
@@ -92,6 +124,7 @@ export function path(rule: Rule, options: PathOptions): Path {
   if (!Number.isSafeInteger(from)) throw unreadableOption("from", "a whole number", from);
   const constants = constantsBySlot(rule, options.constants);
   const initial = initialVector(rule, options.initial);
+  refuseOutsideRange(rule, namedValues(rule, constants, initial));
   const inputs = inputColumns(rule, options.inputs, from, periods);
   const width = initial.length;
   const table = new Float64Array((periods + 1) * width);

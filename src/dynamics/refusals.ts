@@ -91,3 +91,18 @@ export function outsideRange(title: string, condition: string, values: string): 
     { condition },
   );
 }
+
+export function noClosedForm(title: string): ModelError {
+  return new ModelError(
+    "no-closed-form",
+    `${title} has no closed form that is known here for these constants. Step it with path; equilibria and cycles say where it goes in the long run.`,
+    { title },
+  );
+}
+
+export function notAMatrixRule(): ModelError {
+  return new ModelError(
+    "not-a-matrix-rule",
+    "The long run of a matrix is asked for, and this rule is no matrix with a positive dominant root: each line must be a sum of constants times states, as in n1[t+1] = f1*n1 + f2*n2. Use equilibria for other systems.",
+  );
+}

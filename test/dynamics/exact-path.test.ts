@@ -68,7 +68,9 @@ test("decimals are read as they print, and computer numbers nearest to fractions
 test("functions without exact values are refused", () => {
   expect(() =>
     exactPath(rules.ricker(), { constants: { r: 1, K: 10 }, initial: { N: 1 }, periods: 1 }),
-  ).toThrowErrorMatchingInlineSnapshot(`[ModelError: The rule needs the function exp, which has no exact fraction. Use path instead, which works in computer numbers.]`);
+  ).toThrowErrorMatchingInlineSnapshot(
+    `[ModelError: The rule needs the function exp, which has no exact fraction. Use path instead, which works in computer numbers.]`,
+  );
 });
 
 test("a path whose digits grow without end is refused, not run", () => {
