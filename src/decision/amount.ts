@@ -46,7 +46,7 @@ export function shareOfDraws(share: number, error: number, draws: number): strin
 
 /** A share as a percentage, to no more digits than its Monte-Carlo error allows. */
 export function percent(share: number, error: number): string {
-  const decimals = error > 0 ? Math.max(0, -Math.floor(Math.log10(100 * error))) : 1;
+  const decimals = error > 0 ? Math.max(0, Math.round(-Math.log10(100 * error))) : 1;
   return `${(100 * share).toFixed(Math.min(decimals, 6))}%`;
 }
 

@@ -1,4 +1,4 @@
-import { ModelError } from "../numeric/index.js";
+import { ModelError, nearestNames } from "../numeric/index.js";
 
 export function refuseStateUnknown(state: string, states: readonly string[]): ModelError {
   return new ModelError(
@@ -31,5 +31,108 @@ export function refuseNotWatched(state: string, value: number, direction: string
     "paths-not-kept",
     `The paths were too many to keep, and ${state} at ${value} was not watched. Run it again with watch: [{ state: "${state}", value: ${value}, direction: "${direction}" }].`,
     { state, value, direction },
+  );
+}
+
+const list = (names: readonly string[]): string => (names.length === 0 ? "none" : names.join(", "));
+
+function nearest(name: string, known: readonly string[]): string {
+  const [near] = nearestNames(name, known);
+  return near === undefined ? "" : ` Did you mean "${near}"?`;
+}
+
+export function refuseGroup(group: string | undefined, groups: readonly string[]): ModelError {
+  const what = group === undefined ? "The fit has several groups" : `The fit has no group "${group}"`;
+  return new ModelError("which-group", `${what}: ${list(groups)}. Name one with { group }.`, {
+    group,
+    groups,
+  });
+}
+
+export function refuseNoSuchSetting(name: string, known: readonly string[]): ModelError {
+  return new ModelError(
+    "no-such-setting",
+    `Nothing called "${name}" can be set. There are: ${list(known)}.${nearest(name, known)}`,
+    { name, known },
+  );
+}
+
+export function refuseMeasureName(name: string, known: readonly string[]): ModelError {
+  return new ModelError(
+    "unknown-name",
+    `The projection has nothing called "${name}" to measure. It has: ${list(known)}.${nearest(name, known)}`,
+    { name, known },
+  );
+}
+
+export function refuseMeasureWindow(from: number, to: number, ahead: number): ModelError {
+  return new ModelError(
+    "outside-projection",
+    `Periods ${from} to ${to} ahead were asked for, and the projection has 1 to ${ahead}. Give more { periods }, or an earlier one.`,
+    { from, to, ahead },
+  );
+}
+
+export function refuseNoChance(state: string): ModelError {
+  return new ModelError(
+    "nothing-random",
+    `The risk of ${state} needs a rule with random change. Give it: noise: { ${state}: { kind: "additive", sd: 1 } }, or ask for a time instead.`,
+    { state },
+  );
+}
+
+export function refuseNoEffect(unknown: string, measure: string): ModelError {
+  return new ModelError(
+    "no-effect",
+    `${unknown} has no effect on ${measure}: it is the same over the whole range.`,
+    {
+      unknown,
+      measure,
+    },
+  );
+}
+
+export function refuseNoRange(unknown: string): ModelError {
+  return new ModelError(
+    "no-range",
+    `Nothing says where ${unknown} may lie. Give the lowest and the highest value with { between: [low, high] }.`,
+    { unknown },
+  );
+}
+
+export function refuseBounds(unknown: string, from: number, to: number, why: string): ModelError {
+  return new ModelError(
+    "bounds-contradict",
+    `${unknown} cannot be sought between ${from} and ${to}: ${why}.`,
+    { unknown, from, to },
+  );
+}
+
+export function refuseNoTarget(aim: number | undefined): ModelError {
+  return new ModelError(
+    "no-target",
+    `The target has ${aim === undefined ? "no value" : `the value ${aim}`}. Say { is }, { atMost } or { atLeast } with a finite number.`,
+    { aim },
+  );
+}
+
+export function refuseNoObjective(): ModelError {
+  return new ModelError(
+    "no-objective",
+    'Say what is to be best: either { most } or { least }, with one measure, such as most: { total: "yield" }.',
+  );
+}
+
+export function refuseRiskObjective(): ModelError {
+  return new ModelError(
+    "risk-not-smooth",
+    "A risk moves in the steps of its draws, so it has neither a slope nor a sharp optimum. Use tradeoff to see it against the setting, or solveFor with { atMost }.",
+  );
+}
+
+export function refuseNoValues(): ModelError {
+  return new ModelError(
+    "no-values",
+    "A table of choices needs at least one setting in { values } and one measure in { answers }.",
   );
 }
