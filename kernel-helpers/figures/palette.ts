@@ -10,10 +10,10 @@ export interface SeriesStyle {
 const styles: readonly SeriesStyle[] = [
   { colour: "#123c5a", dash: "solid", symbol: "circle" },
   { colour: "#c2541a", dash: "9px,4px", symbol: "diamond" },
-  { colour: "#2b86b5", dash: "2px,3px", symbol: "square" },
-  { colour: "#6f1b4a", dash: "12px,3px,2px,3px", symbol: "triangle-up" },
-  { colour: "#94801b", dash: "16px,5px", symbol: "cross" },
-  { colour: "#4f5d64", dash: "5px,3px,2px,3px,2px,3px", symbol: "triangle-down" },
+  { colour: "#00a0d6", dash: "2px,3px", symbol: "square" },
+  { colour: "#3b0368", dash: "12px,3px,2px,3px", symbol: "triangle-up" },
+  { colour: "#5d4f48", dash: "16px,5px", symbol: "cross" },
+  { colour: "#0a958b", dash: "5px,3px,2px,3px,2px,3px", symbol: "triangle-down" },
 ];
 
 /** The style of a series by its number; after six the shapes go round again. */

@@ -32,7 +32,7 @@ export function tableHtml(table: Table): string {
 
 function cellHtml({ text, mark, numeric }: Cell, tag: "th" | "td"): string {
   const shown = numeric ? numberHtml(text) : escapeHtml(text);
-  const note = mark === "" ? "" : `<sup>${mark}</sup>`;
+  const note = mark === "" ? "" : `<sup class="pw-mark">${mark}</sup>`;
   const scope = tag === "th" ? ' scope="col"' : "";
   return `<${tag}${scope} class="${numeric ? "pw-n" : "pw-t"}" dir="auto">${shown}${note}</${tag}>`;
 }
@@ -66,6 +66,7 @@ ${box} th,${box} td{border:0;border-bottom:1px solid ${look.line};padding:.32em 
 ${box} thead th{font-weight:600;color:${look.quiet};background:${look.shade};vertical-align:bottom;min-width:3.5em}
 ${box} .pw-n{text-align:right;font-variant-numeric:tabular-nums;white-space:nowrap}
 ${box} thead .pw-n{white-space:normal}
+${box} .pw-n .pw-mark{position:absolute;margin-left:.1em}
 ${box} .pw-t{text-align:left}
 ${box} tbody tr,${box} tfoot tr{background:none}
 ${box} tfoot td{font-weight:600;border-top:2px solid ${look.quiet}}

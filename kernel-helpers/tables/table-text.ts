@@ -8,7 +8,11 @@ const widestCell = 44;
 /** A table as text that lines up in a terminal. */
 export function tableText(table: Table): string {
   const laid = laidOut(table);
-  const lines = [laid.headings, ...laid.rows, ...laid.totals].map((line) => line.map(cellLine));
+  const all = [laid.headings, ...laid.rows, ...laid.totals];
+  const marks = laid.headings.map((_, j) => Math.max(...all.map((line) => markLine(line[j]).length)));
+  const lines = all.map((line) =>
+    line.map((cell, j) => cellLine(cell, line === laid.headings ? 0 : (marks[j] ?? 0))),
+  );
   const widths = laid.headings.map((_, j) => Math.max(...lines.map((line) => displayWidth(line[j] ?? ""))));
   const drawn = lines.map((line) =>
     line
@@ -34,11 +38,17 @@ export function tableText(table: Table): string {
   ].join("\n");
 }
 
-function cellLine({ text, mark, numeric }: Cell): string {
+/** Numbers are followed by room for the widest mark of their column, so that marks do not push them out of line. */
+function cellLine(cell: Cell, room: number): string {
+  const { text, numeric } = cell;
   const line = numeric ? text.replace(/[\u2007\u2008]/g, " ") : oneLine(text);
-  const note = mark === "" ? "" : ` ${mark})`;
   // The padding that lines up decimal signs must survive, so numbers are not trimmed.
-  return shortened(/^[-<>]?\d/.test(line) && numeric ? line : oneLine(line), widestCell) + note;
+  const shown = shortened(/^[-<>]?\d/.test(line) && numeric ? line : oneLine(line), widestCell);
+  return shown + (numeric ? markLine(cell).padEnd(room) : markLine(cell));
+}
+
+function markLine(cell: Cell | undefined): string {
+  return cell === undefined || cell.mark === "" ? "" : ` ${cell.mark})`;
 }
 
 function padded(text: string, width: number, column: Cell | undefined): string {

@@ -1,0 +1,128 @@
+/// <reference lib="dom" />
+import { JSDOM } from "jsdom";
+import { describe, expect, test } from "vitest";
+import type { ShownCell, ShownOutput } from "../../src/casework/page/shown-notebook.js";
+import { writePage } from "../../src/casework/page/write-page.js";
+
+const data = (bundle: Record<string, unknown>): ShownOutput => ({
+  output_type: "display_data",
+  data: bundle,
+});
+const code = (source: string, ...outputs: ShownOutput[]): ShownCell => ({
+  cell_type: "code",
+  source,
+  outputs,
+  execution_count: 3,
+});
+const markdown = (source: string): ShownCell => ({ cell_type: "markdown", source });
+
+function read(...cells: ShownCell[]): Document {
+  return new JSDOM(writePage({ cells }, { source: "case.ipynb" })).window.document;
+}
+
+test("title and question stand first, then the answer, then the notebook", () => {
+  const page = read(
+    markdown("# Ferry loan\n\nWhat was lent."),
+    code(
+      "openCase()",
+      data({
+        "application/vnd.periodwise.case+json": { title: "Ferry loan", question: "When is it paid off?" },
+        "text/plain": "drawn twice",
+      }),
+    ),
+    code(
+      "answer()",
+      data({
+        "application/vnd.periodwise.answer+json": { sentence: "In month 254." },
+        "text/plain": "Answer: In month 254.",
+      }),
+    ),
+  );
+  const text = page.querySelector("main")?.textContent ?? "";
+  const places = ["Ferry loan", "When is it paid off?", "In month 254.", "What was lent."].map((part) =>
+    text.indexOf(part),
+  );
+  expect(places).toEqual([...places].sort((a, b) => a - b));
+  expect(Math.min(...places)).toBeGreaterThanOrEqual(0);
+  expect(text).not.toContain("drawn twice");
+  expect(page.querySelectorAll("h1")).toHaveLength(1);
+  expect(page.title).toBe("Ferry loan");
+});
+
+describe("markdown", () => {
+  test("markup in it is shown as text, and only harmless links are links", () => {
+    const page = read(
+      markdown(
+        "Then <script>alert(1)</script> [run](javascript:alert(1)) [site](https://example.org) <b>x</b>",
+      ),
+    );
+    expect(page.querySelectorAll("main script, main b")).toHaveLength(0);
+    expect([...page.querySelectorAll("main a")].map((a) => a.getAttribute("href"))).toEqual([
+      "https://example.org",
+    ]);
+    expect(page.querySelector("main")?.textContent).toContain("<script>alert(1)</script>");
+  });
+
+  test("a picture is shown when the notebook carries it, and named when it would be fetched", () => {
+    const cell = {
+      ...markdown("![plan](attachment:plan.png) ![far](https://example.org/a.png)"),
+      attachments: { "plan.png": { "image/png": "AAAA" } },
+    };
+    const page = read(cell);
+    expect([...page.querySelectorAll("main img")].map((img) => img.getAttribute("src"))).toEqual([
+      "data:image/png;base64,AAAA",
+    ]);
+    expect(page.querySelector("main em")?.textContent).toBe("far");
+  });
+});
+
+describe("outputs", () => {
+  test("the richest form that a page can show is shown", () => {
+    const page = read(
+      code(
+        "a",
+        data({ "text/plain": "plain", "text/html": "<i>rich</i>" }),
+        data({ "text/plain": "<only plain>" }),
+      ),
+    );
+    expect(page.querySelector(".output i")?.textContent).toBe("rich");
+    expect(page.querySelector(".output pre")?.textContent).toBe("<only plain>");
+  });
+
+  test("streams in a row are one block without a terminal's colours", () => {
+    const said = (text: string): ShownOutput => ({ output_type: "stream", name: "stdout", text });
+    const page = read(code("a", said("one \u001b[31mred\u001b[0m\n"), said("two")));
+    expect([...page.querySelectorAll(".output pre")].map((pre) => pre.textContent)).toEqual(["one red\ntwo"]);
+  });
+
+  test("an error is shown as such", () => {
+    const page = read(
+      code("a", {
+        output_type: "error",
+        ename: "ModelError",
+        evalue: "no",
+        traceback: ["\u001b[31mModelError\u001b[0m: no"],
+      }),
+    );
+    expect(page.querySelector(".failed pre")?.textContent).toBe("ModelError: no");
+  });
+});
+
+test("the plotting library is on the page once, whether or not the notebook has it", () => {
+  const library = '<script data-periodwise="library">/*library of the notebook*/</script>';
+  const figure = '<div class="pw-figure"></div>';
+  const html = writePage({
+    cells: [code("a", data({ "text/html": figure + library })), code("b", data({ "text/html": figure }))],
+  });
+  expect(html).not.toContain("library of the notebook");
+  expect(html.match(/window\.periodwisePlot=/g)).toHaveLength(1);
+  expect(writePage({ cells: [markdown("no figure")] })).not.toContain("periodwisePlot");
+});
+
+test("a page may fetch nothing, says so to the browser, and is the same for the same notebook", () => {
+  const cells = [markdown("# A"), code("1 < 2", data({ "text/plain": "true" }))];
+  const html = writePage({ cells });
+  expect(html).toContain("default-src 'none'");
+  expect(html).not.toMatch(/(src|href)="(https?:)?\/\//);
+  expect(writePage({ cells })).toBe(html);
+});
