@@ -25,8 +25,9 @@ test("in greyscale every two series differ in lightness", () => {
 
 test.each(Object.entries(deficiencies))("with %s every two series still differ in colour", (_, rows) => {
   for (const [a, b] of pairs) {
-    const seen = [a, b].map(({ colour }) => lab(seenWith(rows, linear(colour)))) as [number[], number[]];
-    const apart = Math.hypot(...seen[0].map((value, i) => value - (seen[1][i] as number)));
+    const seen = lab(seenWith(rows, linear(a.colour)));
+    const beside = lab(seenWith(rows, linear(b.colour)));
+    const apart = Math.hypot(...seen.map((value, i) => value - (beside[i] as number)));
     // 10 units of CIE 1976 colour difference are seen at a glance (common practice, no source).
     expect(apart).toBeGreaterThan(10);
   }

@@ -22,7 +22,7 @@ function read(...cells: ShownCell[]): Document {
 
 test("title and question stand first, then the answer, then the notebook", () => {
   const page = read(
-    markdown("# Ferry loan\n\nWhat was lent."),
+    markdown("# Ferry loan: when is it over?\n\nWhat was lent."),
     code(
       "openCase()",
       data({
@@ -57,7 +57,7 @@ describe("markdown", () => {
       ),
     );
     expect(page.querySelectorAll("main script, main b")).toHaveLength(0);
-    expect([...page.querySelectorAll("main a")].map((a) => a.getAttribute("href"))).toEqual([
+    expect(Array.from(page.querySelectorAll("main a")).map((a) => a.getAttribute("href"))).toEqual([
       "https://example.org",
     ]);
     expect(page.querySelector("main")?.textContent).toContain("<script>alert(1)</script>");
@@ -69,7 +69,7 @@ describe("markdown", () => {
       attachments: { "plan.png": { "image/png": "AAAA" } },
     };
     const page = read(cell);
-    expect([...page.querySelectorAll("main img")].map((img) => img.getAttribute("src"))).toEqual([
+    expect(Array.from(page.querySelectorAll("main img")).map((img) => img.getAttribute("src"))).toEqual([
       "data:image/png;base64,AAAA",
     ]);
     expect(page.querySelector("main em")?.textContent).toBe("far");
@@ -92,7 +92,9 @@ describe("outputs", () => {
   test("streams in a row are one block without a terminal's colours", () => {
     const said = (text: string): ShownOutput => ({ output_type: "stream", name: "stdout", text });
     const page = read(code("a", said("one \u001b[31mred\u001b[0m\n"), said("two")));
-    expect([...page.querySelectorAll(".output pre")].map((pre) => pre.textContent)).toEqual(["one red\ntwo"]);
+    expect(Array.from(page.querySelectorAll(".output pre")).map((pre) => pre.textContent)).toEqual([
+      "one red\ntwo",
+    ]);
   });
 
   test("an error is shown as such", () => {

@@ -65,8 +65,10 @@ function cellHtml(cell: ShownCell, title: string): string {
   return code + outputsHtml((cell.outputs ?? []).filter((output) => !opensCase(output)));
 }
 
-/** The heading that gave the page its title is not said twice. */
+/** A first heading that is the page's title, or begins with it ("Ferry loan: ..."), is not said twice. */
 function withoutTitle(source: string, title: string): string {
   const heading = /^#\s+(.+)\n*/.exec(source);
-  return heading?.[1]?.replace(/[*_`]/g, "") === title ? source.slice(heading[0].length) : source;
+  const words = heading?.[1]?.replace(/[*_`]/g, "") ?? "";
+  const repeats = words.startsWith(title) && !/^[\p{L}\p{N}]/u.test(words.slice(title.length));
+  return heading && repeats ? source.slice(heading[0].length) : source;
 }
