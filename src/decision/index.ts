@@ -2,6 +2,12 @@ export type { AcrossUnits } from "./across-units.js";
 export { type Best, type BestOptions, best } from "./best.js";
 export type { DeltaMargin } from "./delta-margin.js";
 export type { Measure } from "./measure.js";
+export {
+  type NextReading,
+  type NextReadingOptions,
+  nextReading,
+  type ReadingChoice,
+} from "./next-reading.js";
 export type { GroupReach, Reach, ReachOptions } from "./reach.js";
 export { reaches } from "./reaches.js";
 export {

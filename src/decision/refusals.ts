@@ -136,3 +136,18 @@ export function refuseNoValues(): ModelError {
     "A table of choices needs at least one setting in { values } and one measure in { answers }.",
   );
 }
+
+export function refuseNoPurpose(): ModelError {
+  return new ModelError(
+    "no-purpose",
+    "Say what the reading is for: several rival fits to tell apart, or one fit with the { answer } to be narrowed.",
+  );
+}
+
+export function refuseNoCandidate(from: number, to: number): ModelError {
+  return new ModelError(
+    "no-candidate",
+    `No reading can be taken at the times asked for; the rules know times from ${from} to ${to}, and with errors in the process only those after the record.`,
+    { from, to },
+  );
+}
