@@ -22,6 +22,8 @@ export interface RecordFigureOptions {
 }
 
 const listed = 8;
+/** So many values have no room to be seen apart: then the line alone is drawn. */
+const crowd = 2000;
 
 /**
  * The record before any model: every value as it was read, lines broken at gaps, flagged values ringed.
@@ -29,10 +31,14 @@ const listed = 8;
  * @example recordFigure({ title: "Stock", x: { title: "Week" }, y: { title: "Coils" }, series: [{ name: "counted", x: [0, 1], y: [90, 83] }] });
  */
 export function recordFigure({ title, x, y, series, flagged = [], notes = [] }: RecordFigureOptions): Figure {
-  const layers = series.flatMap((each, style): Layer[] => [
-    { mark: "line", ...brokenAtGaps(each), style, inLegend: false },
-    { mark: "points", ...each, style },
-  ]);
+  const layers = series.flatMap((each, style): Layer[] => {
+    const line = { mark: "line", ...brokenAtGaps(each), style } as const;
+    if (each.x.length > crowd) return [line];
+    return [
+      { ...line, inLegend: false },
+      { mark: "points", ...each, style },
+    ];
+  });
   const flags: PointsLayer = {
     mark: "points",
     name: "flagged",

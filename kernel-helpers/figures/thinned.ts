@@ -7,7 +7,7 @@ export interface Thinned {
 }
 
 /** More points than this a layer are thinned: a screen has no room to show them apart. */
-const most = 4000;
+const most = 2000;
 
 /**
  * Picks the points of a long series to draw: from each run of neighbours the first, and those with the least and
