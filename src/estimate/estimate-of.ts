@@ -20,8 +20,8 @@ export interface Estimate {
   readonly trace: Profile["trace"];
 }
 
-/** How an unknown is reported: a spread is searched on the log scale, and reported on its own. */
-const natural = (role: UnknownRole, value: number): number => (role === "spread" ? Math.exp(value) : value);
+/** How an unknown is reported: a variance by its root, anything else as it is. */
+const reported = (rooted: boolean, value: number): number => (rooted ? Math.sqrt(value) : value);
 
 /** The estimates of an optimum, by unknown; Wald intervals by t where degrees of freedom are given, else normal. */
 export function estimatesOf(
@@ -37,8 +37,9 @@ export function estimatesOf(
     degreesOfFreedom === undefined ? normalQuantile(tail) : studentQuantile(tail, degreesOfFreedom);
   return unknowns.names.map((name, i) => {
     const role = unknowns.roles[i]!;
-    const value = natural(role, found.at[i]!);
-    const error = Math.sqrt(found.covariance[i * size + i]!) * (role === "spread" ? value : 1);
+    const rooted = unknowns.rooted[i]!;
+    const value = reported(rooted, found.at[i]!);
+    const error = Math.sqrt(found.covariance[i * size + i]!) / (rooted ? 2 * value : 1);
     const standardError = found.determined[i] && Number.isFinite(error) ? error : undefined;
     const profile = found.profiles?.[i];
     return {
@@ -47,16 +48,16 @@ export function estimatesOf(
       unit: rule.units[name] ?? "",
       value,
       standardError,
-      profile: profile === undefined ? notComputed(level) : intervalOf(profile, role, level),
+      profile: profile === undefined ? notComputed(level) : intervalOf(profile, rooted, level),
       wald: waldInterval(value, standardError, reach, level),
-      trace: (profile?.trace ?? []).map((at) => ({ ...at, value: natural(role, at.value) })),
+      trace: (profile?.trace ?? []).map((at) => ({ ...at, value: reported(rooted, at.value) })),
     };
   });
 }
 
-function intervalOf({ lower, upper, note }: Profile, role: UnknownRole, level: number): Interval {
+function intervalOf({ lower, upper, note }: Profile, rooted: boolean, level: number): Interval {
   const limit = (value: number | undefined): number | undefined =>
-    value === undefined ? undefined : natural(role, value);
+    value === undefined ? undefined : reported(rooted, value);
   return { kind: "profile", level, lower: limit(lower), upper: limit(upper), note };
 }
 

@@ -30,7 +30,7 @@ export function likelihoodFit(rule: Rule, group: ObservedGroup, options: FitOpti
   const { rows } = prepared(rule, group, unknowns, options);
   const minusTwice = minusTwiceLogLikelihood(rule, group, rows, unknowns, likelihood);
   const found = optimum(
-    likelihoodObjective(unknowns.names.length, minusTwice),
+    likelihoodObjective(minusTwice, unknowns),
     unknowns,
     starts.map((start) => withSpread(start, rows, unknowns, options)),
     () => likelihoodCut(options),
@@ -39,7 +39,7 @@ export function likelihoodFit(rule: Rule, group: ObservedGroup, options: FitOpti
   const spread = unknowns.roles.indexOf("spread");
   return describeFit(rule, group, options, unknowns, rows, found, {
     criteria: criteriaOf(-0.5 * found.value, rows.count, unknowns.names.length),
-    sigma: likelihood.spreads[0] === "sigma" ? Math.exp(found.at[spread]!) : undefined,
+    sigma: likelihood.spreads[0] === "sigma" ? Math.sqrt(found.at[spread]!) : undefined,
     exact: false,
   });
 }
@@ -64,7 +64,7 @@ function minusTwiceLogLikelihood(
   return (at) => {
     place(unknowns, at);
     rows.prepare(at, false);
-    const spread = unknowns.spreads[0] ?? 1;
+    const spread = spreadOf(unknowns);
     let sum = 0;
     for (let i = 0; i < rows.count; i++) {
       rows.residualAt(i);
@@ -72,6 +72,13 @@ function minusTwiceLogLikelihood(
     }
     return Number.isFinite(sum) ? -2 * sum : Number.POSITIVE_INFINITY;
   };
+}
+
+function spreadOf({ spreads, rooted }: Unknowns): number {
+  const [spread] = spreads;
+  if (spread === undefined) return 1;
+  // A dispersion of 0 is the Poisson distribution, which the formulas reach only in the limit.
+  return rooted.includes(true) ? Math.sqrt(spread) : Math.max(spread, 1e-9);
 }
 
 /** A start with its spread put where the residuals say: their root mean square, or the excess over a Poisson's. */
@@ -93,9 +100,9 @@ function withSpread(
     means += rows.fitted() ** 2;
   }
   const counts = options.spread === "negative-binomial" && !onLogScale(options);
-  const spread = counts ? Math.max(excess / means, 0.01) : Math.sqrt(squares / rows.count);
+  const spread = counts ? Math.max(excess / means, 0.01) : squares / rows.count;
   unknowns.roles.forEach((role, i) => {
-    if (role === "spread") whole[i] = Math.log(spread || 1e-6);
+    if (role === "spread") whole[i] = spread;
   });
   return whole;
 }

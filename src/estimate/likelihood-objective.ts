@@ -6,6 +6,7 @@ import {
 } from "../numeric/index.js";
 import { factorSums } from "./factor-sums.js";
 import type { Objective } from "./objective.js";
+import type { Unknowns } from "./unknowns.js";
 
 const relativeStep = Math.cbrt(Number.EPSILON);
 /** Second derivatives by differences keep about six digits. */
@@ -14,21 +15,30 @@ const dependent = 1e-3;
 /**
  * Twice a negative log-likelihood as an objective, with derivatives by differences.
  *
- * @param value - at unknowns [size]; infinite where the likelihood does not exist.
+ * @param value - at the unknowns; infinite where the likelihood does not exist.
  */
-export function likelihoodObjective(size: number, value: (at: Float64Array) => number): Objective {
+export function likelihoodObjective(
+  value: (at: Float64Array) => number,
+  { names, lower, upper }: Unknowns,
+): Objective {
+  const size = names.length;
   let last = new Float64Array(size);
+  let scale: Float64Array | undefined;
   let inverse: Float64Array | undefined;
   return {
     size,
-    minimise(start, lower, upper) {
-      const found = minimise(value, start, { lower, upper, ...(inverse && { inverse }) });
+    value,
+    minimise(start, low, high) {
+      scale ??= start.map((each) => Math.abs(each) || 1);
+      const held = low.map((limit, i) => (limit === high[i] ? 1 : 0));
+      const known = inverse && { inverse: conditioned(inverse, held) };
+      const found = minimise(value, start, { lower: low, upper: high, scale, ...known });
       last = Float64Array.from(found.estimates);
       return found;
     },
     slope(i) {
       const here = last[i]!;
-      const step = relativeStep * Math.max(Math.abs(here), 1e-3);
+      const step = relativeStep * Math.max(Math.abs(here), 1e-3 * (scale?.[i] ?? 1));
       last[i] = here + step;
       const above = value(last);
       last[i] = here - step;
@@ -37,22 +47,67 @@ export function likelihoodObjective(size: number, value: (at: Float64Array) => n
       return (above - below) / (2 * step);
     },
     covariance(at) {
-      const found = inverseOfHalf(secondDerivatives(value, at.slice()), size);
+      const free = Array.from(at, (_, i) => i).filter((i) => at[i]! > lower[i]! && at[i]! < upper[i]!);
+      const found = covarianceOfFree(value, at, free);
       // Profiles search from here: the inverse of the whole second derivatives shortens every one of them.
-      inverse = found.covariance.map((entry) => entry / 2);
+      inverse = found.covariance.map((entry, k) => {
+        const onDiagonal = k % (size + 1) === 0;
+        const guess = onDiagonal ? (0.2 * (scale?.[k / (size + 1)] ?? 1)) ** 2 : 0;
+        return Number.isNaN(entry) ? guess : entry / 2;
+      });
       return found;
     },
   };
 }
 
-function inverseOfHalf(bends: Float64Array, size: number): UnscaledCovariance {
-  const triangle = new Float64Array(size * size);
-  const none = new Float64Array(size);
+/** Inverse of half the second derivatives by the unknowns inside their bounds; those at a bound have none. */
+function covarianceOfFree(
+  value: (at: Float64Array) => number,
+  at: Float64Array,
+  free: readonly number[],
+): UnscaledCovariance {
+  const size = at.length;
+  const count = free.length;
+  const whole = at.slice();
+  const along = (inside: Float64Array): number => {
+    free.forEach((i, k) => {
+      whole[i] = inside[k]!;
+    });
+    return value(whole);
+  };
+  const bends = secondDerivatives(
+    along,
+    Float64Array.from(free, (i) => at[i]!),
+  );
+  const triangle = new Float64Array(count * count);
   factorSums(
     bends.map((bend) => bend / 2),
-    none,
+    new Float64Array(count),
     triangle,
-    new Float64Array(size),
+    new Float64Array(count),
   );
-  return covarianceFromTriangle(triangle, size, dependent);
+  const inside = covarianceFromTriangle(triangle, count, dependent);
+  const covariance = new Float64Array(size * size).fill(Number.NaN);
+  const determined = new Array<boolean>(size).fill(false);
+  free.forEach((i, a) => {
+    determined[i] = inside.determined[a]!;
+    free.forEach((j, b) => {
+      covariance[i * size + j] = inside.covariance[a * count + b]!;
+    });
+  });
+  return { covariance, determined, rank: inside.rank };
+}
+
+/** Inverse second derivatives of the unknowns that move, given those held: a held one is swept out. */
+function conditioned(inverse: Float64Array, held: Float64Array): Float64Array {
+  const size = held.length;
+  const swept = inverse.slice();
+  held.forEach((isHeld, h) => {
+    const pivot = swept[h * size + h]!;
+    if (isHeld !== 1 || !(pivot > 0)) return;
+    const column = Float64Array.from({ length: size }, (_, i) => swept[i * size + h]!);
+    for (let k = 0; k < swept.length; k++)
+      swept[k] = swept[k]! - (column[Math.floor(k / size)]! * column[k % size]!) / pivot;
+  });
+  return swept;
 }

@@ -15,6 +15,7 @@ export interface Lowest {
  */
 export interface Objective {
   readonly size: number;
+  readonly value: (at: Float64Array) => number;
   /** Searches from a start; unknowns with equal bounds are held there. */
   readonly minimise: (start: Float64Array, lower: Float64Array, upper: Float64Array) => Lowest;
   /** Slope of the value by unknown i where the last search ended. */

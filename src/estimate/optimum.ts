@@ -53,7 +53,8 @@ export function optimum(
     rivals,
   };
   if (!withProfiles) return { ...base, profiles: undefined, determined: unscaled.determined };
-  const problem = { objective, estimates: at, value: best.value, lower, upper, ...cut };
+  const others = distinct(searches).filter((other) => !alike(other, at));
+  const problem = { objective, estimates: at, value: best.value, lower, upper, covariance, others, ...cut };
   const profiles = unknowns.names.map((_, i) => {
     const error = Math.sqrt(covariance[i * objective.size + i]!);
     const usable = unscaled.determined[i] && error > 0 && Number.isFinite(error);
@@ -63,6 +64,14 @@ export function optimum(
   if (better !== undefined && starts[0] !== better)
     return optimum(objective, unknowns, [better], cutAt, withProfiles);
   return { ...base, profiles, determined: unscaled.determined.map((known, i) => known && profiles[i]!.firm) };
+}
+
+/** The ends of searches, each once. */
+function distinct(searches: readonly Lowest[]): readonly Float64Array[] {
+  const found: Float64Array[] = [];
+  for (const { estimates } of searches)
+    if (!found.some((other) => alike(other, estimates))) found.push(estimates);
+  return found;
 }
 
 function rivalsOf(best: Lowest, searches: readonly Lowest[], within: number): readonly Lowest[] {

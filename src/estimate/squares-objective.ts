@@ -15,6 +15,7 @@ export function squaresObjective(system: LinearisedSystem): Objective {
   const workspace = squaresWorkspace(size);
   return {
     size,
+    value: system.evaluate,
     minimise(start, lower, upper) {
       const { estimates, sumOfSquares, stop, evaluations } = minimiseSquares(system, start, {
         lower,

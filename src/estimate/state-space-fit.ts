@@ -40,7 +40,7 @@ export function stateSpaceFit(rule: Rule, group: ObservedGroup, options: FitOpti
   const attempt = (start: Filtering["start"]): GroupFit | undefined => {
     const filtering = { start, method } as const;
     const space = stateSpace(rule, group, unknowns, options, filtering);
-    const objective = likelihoodObjective(unknowns.names.length, space.minusTwice);
+    const objective = likelihoodObjective(space.minusTwice, unknowns);
     const usable = begun.filter((at) => Number.isFinite(space.minusTwice(at)));
     if (usable.length === 0) return undefined;
     const found = optimum(
@@ -76,7 +76,7 @@ function withSplits(
   rows.prepare(start, false);
   let squares = 0;
   for (let i = 0; i < rows.count; i++) squares += rows.residualAt(i) ** 2;
-  const scatter = Math.sqrt(squares / rows.count);
+  const scatter = squares / rows.count;
   return splits.map(([process, observation]) => {
     const whole = new Float64Array(unknowns.names.length);
     whole.set(start);
@@ -84,7 +84,7 @@ function withSplits(
     const known = typeof options.spread === "object";
     for (let k = 0; k < unknowns.spreads.length; k++) {
       const share = known || k < rule.states.length ? process : observation;
-      whole[first + k] = Math.log(share * scatter);
+      whole[first + k] = share * share * scatter;
     }
     return whole;
   });
@@ -120,7 +120,7 @@ function described(
   const known = typeof options.spread === "object" ? options.spread.sd : undefined;
   const spread = (first: number): Record<string, number> =>
     Object.fromEntries(
-      rule.states.map((state, s) => [state, unknowns.spreads[first + s] ?? known ?? Number.NaN]),
+      rule.states.map((state, s) => [state, rootOf(unknowns.spreads[first + s]) ?? known ?? Number.NaN]),
     );
   const filter: Filtered = {
     processError: spread(0),
@@ -129,4 +129,8 @@ function described(
     last: { mean: Array.from(space.belief.mean), covariance: Array.from(space.belief.covariance) },
   };
   return Object.freeze({ ...fitted, filter: Object.freeze(filter) });
+}
+
+function rootOf(variance: number | undefined): number | undefined {
+  return variance === undefined ? undefined : Math.sqrt(variance);
 }

@@ -53,12 +53,13 @@ export function stateSpace(
   const { constants, spreads } = unknowns;
   const variance = new Float64Array(rule.states.length);
   const known = typeof options.spread === "object" ? options.spread.sd : undefined;
-  const readingVariance = (s: number): number => (known ?? spreads[rule.states.length + s]!) ** 2;
+  const readingVariance = (s: number): number =>
+    known === undefined ? spreads[rule.states.length + s]! : known * known;
   const from = start === "diffuse" ? readings.skipped : 0;
 
   const setDown = (at: Float64Array): void => {
     place(unknowns, at);
-    for (let s = 0; s < variance.length; s++) variance[s] = spreads[s]! ** 2;
+    for (let s = 0; s < variance.length; s++) variance[s] = spreads[s]!;
   };
   const exact = (predicted?: Float64Array): number => {
     const linear = linearAt(dynamics, constants, readings, variance[0]!, readingVariance(0));

@@ -18,8 +18,9 @@ export interface Unknowns {
   readonly initial: Float64Array;
   /** [states]: recorded = factor * state; 1 where there is none. */
   readonly factors: Float64Array;
-  /** Standard deviations or dispersions; the unknown itself is their logarithm. */
+  /** Variances, or a dispersion; their roots are reported where `rooted` says so. */
   readonly spreads: Float64Array;
+  readonly rooted: readonly boolean[];
   readonly lower: Float64Array;
   readonly upper: Float64Array;
 }
@@ -56,7 +57,9 @@ export function unknownsOf(rule: Rule, options: FitOptions, spreads: readonly st
     ),
     ...spreads.map((name, k): Unknown => ({ name, role: "spread", column: afterFactors + k })),
   ];
-  const limits = all.map(({ name, role }) => bounds[name] ?? (role === "factor" ? [0, Infinity] : open));
+  const limits = all.map(
+    ({ name, role }) => bounds[name] ?? (role === "factor" || role === "spread" ? positive : open),
+  );
   return {
     names: all.map(({ name }) => name),
     roles: all.map(({ role }) => role),
@@ -65,11 +68,14 @@ export function unknownsOf(rule: Rule, options: FitOptions, spreads: readonly st
     initial: Float64Array.from(known, (value) => value ?? Number.NaN),
     factors: new Float64Array(rule.states.length).fill(1),
     spreads: new Float64Array(spreads.length),
+    // A dispersion is a ratio of its own; the others are variances, which reach 0 with a slope where roots do not.
+    rooted: all.map(({ name, role }) => role === "spread" && name !== "dispersion"),
     lower: Float64Array.from(limits, ([low]) => low),
     upper: Float64Array.from(limits, ([, high]) => high),
   };
 }
 
+const positive: readonly [number, number] = [0, Number.POSITIVE_INFINITY];
 const open: readonly [number, number] = [Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY];
 
 /** The given value of a slot at the first period, oldest first where there are several; undefined = to be found. */
@@ -89,6 +95,6 @@ export function place(unknowns: Unknowns, values: Float64Array): void {
     if (column < constants.length) constants[column] = values[i]!;
     else if (column < afterSlots) initial[column - constants.length] = values[i]!;
     else if (column < afterFactors) factors[column - afterSlots] = values[i]!;
-    else spreads[column - afterFactors] = Math.exp(values[i]!);
+    else spreads[column - afterFactors] = values[i]!;
   }
 }

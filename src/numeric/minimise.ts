@@ -17,6 +17,8 @@ export interface MinimiseFunctionOptions {
   readonly tolerance?: number;
   /** Default 200. */
   readonly iterationLimit?: number;
+  /** Typical size of each argument, below which difference steps do not shrink much further; default 1. */
+  readonly scale?: Float64Array;
   /** Inverse of the second derivatives near the optimum, [size, size], where it is known: saves most of the search. */
   readonly inverse?: Float64Array;
 }
@@ -45,6 +47,7 @@ export function minimise(
   const limited: Limited = {
     lower,
     upper,
+    scale: options.scale ?? new Float64Array(size).fill(1),
     of(at) {
       evaluations++;
       const value = of(at);
@@ -64,6 +67,7 @@ interface Limited {
   readonly of: (at: Float64Array) => number;
   readonly lower: Float64Array;
   readonly upper: Float64Array;
+  readonly scale: Float64Array;
 }
 
 function descend(
@@ -131,7 +135,7 @@ function localModel(
       if (fixed(i)) continue;
       const { bend } = slopeAndBend(limited, at, here, i, Math.sqrt(relativeStep));
       inverse[i * size + i] =
-        bend > 0 ? 1 / bend : (0.1 * (Math.abs(at[i]!) || 1)) / (Math.abs(gradient[i]!) || 1);
+        bend > 0 ? 1 / bend : (0.1 * (Math.abs(at[i]!) || limited.scale[i]!)) / (Math.abs(gradient[i]!) || 1);
     }
     remember();
     fresh = true;
@@ -167,14 +171,14 @@ function localModel(
 
 /** First and second derivative by argument i, from one side where the other is barred. */
 function slopeAndBend(
-  { of, lower, upper }: Limited,
+  { of, lower, upper, scale }: Limited,
   at: Float64Array,
   value: number,
   i: number,
   relative: number,
 ): { readonly slope: number; readonly bend: number } {
   const here = at[i]!;
-  const step = relative * Math.max(Math.abs(here), 1e-3);
+  const step = relative * Math.max(Math.abs(here), 1e-3 * scale[i]!);
   at[i] = Math.min(here + step, upper[i]!);
   const up = at[i]! - here;
   const above = up > 0 ? of(at) : value;
