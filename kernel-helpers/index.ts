@@ -1,4 +1,19 @@
-export type { Reach, ReachOptions } from "../src/decision/index.js";
+export type {
+  Best,
+  BestOptions,
+  Measure,
+  NextReading,
+  NextReadingOptions,
+  Reach,
+  ReachOptions,
+  Sensitivity,
+  SensitivityOptions,
+  Solved,
+  SolveOptions,
+  Target,
+  Tradeoff,
+  TradeoffOptions,
+} from "../src/decision/index.js";
 export {
   type Estimate,
   estimates,
@@ -11,7 +26,13 @@ export {
 } from "../src/estimate/index.js";
 export type { Check, CheckOptions, CompareOptions, Comparison } from "../src/evidence/index.js";
 export { leastSquares, ModelError } from "../src/numeric/index.js";
-export type { Forecast, ForecastOptions } from "../src/projection/index.js";
+export type {
+  Forecast,
+  ForecastOptions,
+  InputPlan,
+  SimulateOptions,
+  Simulation,
+} from "../src/projection/index.js";
 export type {
   DifferenceOptions,
   Differences,
@@ -23,11 +44,12 @@ export type { ReadOptions, WriteOptions } from "../src/store/index.js";
 export { answer, type CaseOptions, closeCase, openCase } from "./commands/case.js";
 export type { Domain } from "./commands/cautions.js";
 export { check } from "./commands/checks.js";
+export { best, sensitivity, tradeoff } from "./commands/choices.js";
 export { compare } from "./commands/comparisons.js";
-export { reaches } from "./commands/decisions.js";
+export { nextReading, reaches, solveFor } from "./commands/decisions.js";
 export { type Explanation, explain } from "./commands/explain.js";
 export { fit } from "./commands/fits.js";
-export { forecast } from "./commands/projections.js";
+export { forecast, simulate } from "./commands/projections.js";
 export {
   differences,
   observations,

@@ -1,42 +1,57 @@
-import { type Reach, type ReachOptions, reaches as reachesValue } from "../../src/decision/index.js";
+import {
+  type NextReading,
+  type NextReadingOptions,
+  nextReading as nextReadingOf,
+  type Reach,
+  type ReachOptions,
+  reaches as reachesValue,
+  type Solved,
+  type SolveOptions,
+  solveFor as solveForSetting,
+} from "../../src/decision/index.js";
+import type { Fit } from "../../src/estimate/index.js";
 import type { Forecast, Simulation } from "../../src/projection/index.js";
-import { showing, type Table, table } from "../tables/index.js";
+import type { Rule } from "../../src/rule/index.js";
+import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { showNextReading, showReach, showSolved } from "./show-decisions.js";
 import { shownTogether } from "./shown-together.js";
 
 /**
- * When a forecast state first reaches a value; the result shows time, margin, first recorded period and the
- * probability of never, and says it in a sentence.
+ * When a projected state first reaches a value; the result shows time, margin, first recorded period, the
+ * distribution over periods and the probability of never, and says it in a sentence.
  *
  * @example reaches(ahead, { state: "N", value: 120, direction: "rising" }).sentence;
  */
 export function reaches(ahead: Forecast | Simulation, options: ReachOptions): Reach {
   const found = reachesValue(ahead, options);
   caseLog.noteStep(`asked when ${found.state} reaches ${found.value} ${found.unit}, ${found.direction}`);
-  return showing({ ...found }, () => shownTogether([reachTable(found)]));
+  return showing({ ...found }, () => shownTogether(showReach(found)));
 }
 
-function reachTable(found: Reach): Table {
-  const grouped = found.groups.length > 1;
-  const time = { kind: "number", digits: 5, unit: found.periodUnit } as const;
-  const percent = `${100 * found.level}%`;
-  return table({
-    title: `When ${found.state} reaches ${found.value} ${found.unit}`,
-    columns: [
-      ...(grouped ? [{ key: "group", label: "Group", kind: "text" } as const] : []),
-      { key: "time", label: "On the fitted path", ...time },
-      { key: "lower", label: `Interval ${percent}, from`, ...time },
-      { key: "upper", label: "to", ...time },
-      { key: "firstPeriod", label: "First recorded period", ...time },
-      { key: "never", label: "Share of draws never there", kind: "probability", pairedWith: "neverError" },
-    ],
-    rows: found.groups.map((group) => ({
-      ...group,
-      time: group.time ?? "not reached",
-      firstPeriod: group.firstPeriod ?? "not reached",
-      lower: group.lower ?? "none",
-      upper: group.upper ?? "none",
-    })),
-    notes: [`The interval carries the uncertainty of the ${found.margin}.`, found.sentence],
-  });
+/**
+ * Finds what a constant, a first value or the level of an input must be to meet a target; the result shows every
+ * solution with its margin, and says it in a sentence.
+ *
+ * @example
+ * const loan = recurrence("owed[t+1] = owed*(1 + i) - payment", { fixed: { i: 0.01 } });
+ * solveFor(loan, { unknown: "payment", constants: { payment: 100 }, initial: { owed: 1000 }, periods: 12,
+ *   until: { level: "owed", at: 12, is: 0 } }).solutions[0].value // 1000*0.01/(1 - 1.01**-12)
+ */
+export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
+  const found = solveForSetting(subject, { seed: caseLog.seed(), ...options });
+  caseLog.noteStep(`asked what ${found.unknown} brings ${found.measure} to its target`);
+  return showing({ ...found }, () => shownTogether(showSolved(found)));
+}
+
+/**
+ * Which further reading would tell rival rules apart, or narrow a named answer; the result shows the gain of each
+ * time, with its Monte-Carlo error.
+ *
+ * @example nextReading(fitted, { periods: 10, answer: { constant: "K" } }).sentence;
+ */
+export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOptions): NextReading {
+  const found = nextReadingOf(fits, { seed: caseLog.seed(), ...options });
+  caseLog.noteStep(`asked which further reading of ${found.state} would ${found.purpose}`);
+  return showing({ ...found }, () => shownTogether(showNextReading(found)));
 }

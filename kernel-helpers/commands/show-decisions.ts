@@ -1,0 +1,117 @@
+import type { NextReading, Reach, Solved } from "../../src/decision/index.js";
+import { type Figure, figure } from "../figures/index.js";
+import { type Column, type Table, table } from "../tables/index.js";
+import { projectedName } from "./show-forecast.js";
+
+const percent = (level: number): string => `${Number((100 * level).toPrecision(12))}%`;
+
+/** The answer to "when": a table of groups, and the distribution over periods where chance has a part. */
+export function showReach(found: Reach): readonly (Table | Figure)[] {
+  const figures = found.groups.some((group) => group.distribution.length > 1) ? [reachFigure(found)] : [];
+  return [reachTable(found), ...figures];
+}
+
+function reachTable(found: Reach): Table {
+  const time = { kind: "number", digits: 5, unit: found.periodUnit } as const;
+  const grouped: Column[] = found.groups.length > 1 ? [{ key: "who", label: "Group", kind: "text" }] : [];
+  return table({
+    title: `When ${found.state} reaches ${found.value} ${found.unit}`,
+    columns: [
+      ...grouped,
+      { key: "time", label: "Without random change", ...time },
+      { key: "lower", label: `Interval ${percent(found.level)}, from`, ...time },
+      { key: "upper", label: "to", ...time },
+      { key: "firstPeriod", label: "First recorded period", ...time },
+      { key: "never", label: "Share of draws never there", kind: "probability", pairedWith: "neverError" },
+      { key: "neverError", label: "Monte-Carlo error", kind: "number", digits: 1 },
+    ],
+    rows: found.groups.map((group) => ({
+      ...group,
+      who: projectedName(group),
+      time: group.time ?? "not reached",
+      firstPeriod: group.firstPeriod ?? "not reached",
+      lower: group.lower ?? "none",
+      upper: group.upper ?? "none",
+    })),
+    notes: [`The interval carries the uncertainty of the ${found.margin}.`, found.sentence],
+  });
+}
+
+function reachFigure(found: Reach): Figure {
+  return figure({
+    title: `By when ${found.state} is at or past ${found.value} ${found.unit}`,
+    x: { title: "First recorded period", unit: found.periodUnit },
+    y: { title: "Share of draws there by then", ends: [0, 1] },
+    layers: found.groups.map((group) => ({
+      mark: "line",
+      name: projectedName(group) || "draws",
+      x: group.distribution.map((row) => row.time),
+      y: group.distribution.map((row) => row.by),
+      stepped: true,
+    })),
+  });
+}
+
+/** The answer to "what setting": one row a solution. */
+export function showSolved(found: Solved): readonly Table[] {
+  const setting = { kind: "number", digits: 8, unit: found.unit } as const;
+  return [
+    table({
+      title: `What ${found.unknown} must be`,
+      columns: [
+        { key: "value", label: found.unknown, ...setting },
+        { key: "lower", label: `Interval ${percent(found.level)}, from`, ...setting, digits: 4 },
+        { key: "upper", label: "to", ...setting, digits: 4 },
+        { key: "meets", label: "Met by", kind: "text" },
+        { key: "achieved", label: found.measure, kind: "number", digits: 5 },
+        { key: "achievedError", label: "Monte-Carlo error", kind: "number", digits: 1 },
+      ],
+      rows: found.solutions.map((solution) => ({
+        ...solution,
+        lower: solution.margin === undefined ? "exact" : (solution.margin.lower ?? "none"),
+        upper: solution.margin === undefined ? "exact" : (solution.margin.upper ?? "none"),
+      })),
+      notes: [found.sentence],
+    }),
+  ];
+}
+
+/** The answer to "which reading": gain against time, and the best few. */
+export function showNextReading(found: NextReading): readonly (Figure | Table)[] {
+  const narrowing = found.purpose === "narrow the answer";
+  const gain = narrowing ? "Margin expected to narrow by" : "Expected evidence (2 ln likelihood)";
+  const x = found.choices.map((choice) => choice.time);
+  const y = found.choices.map((choice) => choice.gain);
+  return [
+    figure({
+      title: `What a further reading of ${found.state} would bring`,
+      x: { title: "Time of the reading", unit: found.periodUnit },
+      y: { title: gain },
+      layers: [
+        {
+          mark: "points",
+          name: "expected gain, with 2 Monte-Carlo errors",
+          x,
+          y,
+          lower: found.choices.map((choice) => choice.gain - 2 * choice.error),
+          upper: found.choices.map((choice) => choice.gain + 2 * choice.error),
+        },
+        { mark: "vertical", name: "best", x: found.best.time },
+      ],
+      notes: [found.sentence],
+    }),
+    table({
+      title: "The five times that are worth most",
+      columns: [
+        { key: "time", label: "Time", kind: "number", digits: 6, unit: found.periodUnit },
+        narrowing
+          ? { key: "gain", label: gain, kind: "percent", digits: 1 }
+          : { key: "gain", label: gain, kind: "number", digits: 3 },
+        { key: "error", label: "Monte-Carlo error", kind: "number", digits: 1 },
+        { key: "cost", label: "Cost", kind: "number", digits: 3 },
+      ],
+      rows: [...found.choices].sort((a, b) => b.worth - a.worth).slice(0, 5),
+      notes: [found.sentence],
+    }),
+  ];
+}

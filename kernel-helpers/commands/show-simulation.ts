@@ -1,0 +1,91 @@
+import type { GroupForecast, Simulation } from "../../src/projection/index.js";
+import { type Figure, figure, type Layer } from "../figures/index.js";
+import { type Column, type Table, table } from "../tables/index.js";
+import { cautionsByGroup } from "./cautions-by-group.js";
+
+/** A simulation as a reader sees it: its paths by scenario, and the numbers at their periods. */
+export function showSimulation(run: Simulation): readonly (Figure | Table)[] {
+  return [...figuresOf(run), tableOf(run)];
+}
+
+const percent = (level: number): string => `${Number((100 * level).toPrecision(12))}%`;
+
+function figuresOf(run: Simulation): Figure[] {
+  return run.rule.states.map((name, s) =>
+    figure({
+      title: `Simulation of ${run.rule.text}`,
+      panels: run.groups.map((group) => ({
+        title: group.scenario,
+        x: { title: "Period" },
+        y: { title: name, unit: group.states[s]!.unit },
+        layers: layersOf(run, group, s),
+      })),
+      notes: notesOf(run),
+    }),
+  );
+}
+
+function layersOf(run: Simulation, group: GroupForecast, place: number): Layer[] {
+  const state = group.states[place]!;
+  const bands = run.options.paths === 1 ? [] : [...state.bands].sort((a, b) => b.level - a.level);
+  return [
+    ...bands.map(({ level, lower, upper }, nested): Layer => {
+      const name = `${percent(level)} of simulated paths`;
+      return { mark: "band", name, x: group.time, lower, upper, nested, style: 0 };
+    }),
+    { mark: "line", name: "without random change", x: group.time, y: state.central, style: 0 },
+  ];
+}
+
+function tableOf(run: Simulation): Table {
+  const level = Math.max(...run.options.levels);
+  const random = run.options.paths > 1;
+  const unit = run.groups[0]?.states[0]?.unit ?? "";
+  const number = { kind: "number", digits: 6, unit } as const;
+  const columns: Column[] = [
+    ...(run.groups.length > 1 ? [{ key: "scenario", label: "Scenario", kind: "text" } as const] : []),
+    ...(run.rule.states.length > 1 ? [{ key: "state", label: "State", kind: "text" } as const] : []),
+    { key: "period", label: "Period", kind: "integer" },
+    { key: "central", label: "Without random change", ...number },
+  ];
+  if (random)
+    columns.push(
+      { key: "median", label: "Half of paths below", ...number },
+      { key: "lower", label: `${percent(level)} of paths, from`, ...number },
+      { key: "upper", label: "to", ...number },
+    );
+  return table({
+    title: "Simulated periods",
+    columns,
+    rows: rowsOf(run, level),
+    limit: 24,
+    notes: notesOf(run),
+  });
+}
+
+function rowsOf(run: Simulation, level: number): Readonly<Record<string, unknown>>[] {
+  return run.groups.flatMap((group) =>
+    group.states.flatMap((state) => {
+      const band = state.bands.find((each) => each.level === level);
+      return group.index.map((period, t) => ({
+        scenario: group.scenario,
+        state: state.state,
+        period,
+        central: state.central[t],
+        median: state.median[t],
+        lower: band?.lower[t],
+        upper: band?.upper[t],
+      }));
+    }),
+  );
+}
+
+function notesOf(run: Simulation): string[] {
+  const { paths, seed } = run.options;
+  const constants = Object.entries(run.constants).map(([name, value]) => `${name} = ${value}`);
+  return [
+    ...(constants.length > 0 ? [`At ${constants.join(", ")}.`] : []),
+    ...(paths > 1 ? [`${paths} simulated paths, seed ${seed}; quantiles by definition 7.`] : []),
+    ...cautionsByGroup(run.groups.map((group) => ({ ...group, group: group.scenario }))),
+  ];
+}
