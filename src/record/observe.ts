@@ -75,7 +75,8 @@ function byPeriod(rows: Int32Array, { position }: PeriodAxis): Int32Array {
 }
 
 function rowsWhere(table: ColumnTable, where: ObservationOptions["where"] = {}): Int32Array {
-  const all = Int32Array.from({ length: rowCount(table) }, (_, row) => row);
+  const all = new Int32Array(rowCount(table));
+  for (let row = 0; row < all.length; row++) all[row] = row;
   const wanted = Object.entries(where).map(([name, cell]) => ({
     column: columnNamed(table, name, "a condition"),
     cell: String(cell),

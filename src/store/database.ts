@@ -1,4 +1,4 @@
-import type { DuckDBConnection, DuckDBDataChunk, DuckDBInstance } from "@duckdb/node-api";
+import type { DuckDBConnection, DuckDBInstance } from "@duckdb/node-api";
 
 let started: Promise<DuckDBInstance> | undefined;
 
@@ -44,32 +44,4 @@ export function quoted(text: string): string {
 /** A name as an SQL identifier. */
 export function identifier(name: string): string {
   return `"${name.replaceAll('"', '""')}"`;
-}
-
-/** Numbers of one column of many chunks; NaN where a value is missing. */
-export function numbersOf(chunks: readonly DuckDBDataChunk[], column: number, rows: number): Float64Array {
-  const values = new Float64Array(rows);
-  let at = 0;
-  for (const chunk of chunks) {
-    const vector = chunk.getColumnVector(column);
-    for (let i = 0; i < chunk.rowCount; i++) values[at++] = Number(vector.getItem(i) ?? Number.NaN);
-  }
-  return values;
-}
-
-/** Cells of one column of many chunks, as a conversion gives them; null where a value is missing. */
-export function cellsOf(
-  chunks: readonly DuckDBDataChunk[],
-  column: number,
-  convert: (value: unknown) => unknown,
-): unknown[] {
-  const cells: unknown[] = [];
-  for (const chunk of chunks) {
-    const vector = chunk.getColumnVector(column);
-    for (let i = 0; i < chunk.rowCount; i++) {
-      const value = vector.getItem(i);
-      cells.push(value === null ? null : convert(value));
-    }
-  }
-  return cells;
 }

@@ -1,11 +1,12 @@
 import { type Column, isEmpty } from "../record/index.js";
 import { columnNames } from "./column-names.js";
 import { csvRecords } from "./csv-records.js";
-import { cellsOf, numbersOf, quoted, withDatabase } from "./database.js";
+import { quoted, withDatabase } from "./database.js";
 import { dateOrdersOf, plainDate } from "./date-form.js";
 import { decimalSignOf } from "./number-form.js";
 import type { ReadOptions } from "./read-options.js";
 import type { FileColumns } from "./stored-table.js";
+import { streamColumns } from "./stream-columns.js";
 
 const looked = 5000;
 
@@ -64,22 +65,15 @@ async function typedRead(
     `SELECT ${selected.join(", ")} FROM read_csv(${quoted(path)}, auto_detect = false, header = true, ` +
     `delim = ${quoted(delimiter)}, quote = '"', escape = '"', strict_mode = true, null_padding = false, ` +
     `allow_quoted_nulls = false, nullstr = '', columns = {${types}})`;
-  return withDatabase(async (connection) => {
-    const result = await connection.run(query);
-    const chunks = await result.fetchAllChunks();
-    const rows = chunks.reduce((sum, chunk) => sum + chunk.rowCount, 0);
-    const columns = forms.map(
-      (form, i): Column =>
-        form === "number" ? exactNumbers(numbersOf(chunks, i, rows)) : cellsOf(chunks, i, String),
-    );
-    if (rows === 0 || columns.every((column) => isEmpty(column[rows - 1]))) throw new Error("an empty tail");
-    return columns;
-  });
+  const columns = await withDatabase((connection) => streamColumns(connection, query, forms));
+  const last = (columns[0]?.length ?? 0) - 1;
+  if (last < 0 || columns.every((column) => isEmpty(column[last]))) throw new Error("an empty tail");
+  for (const column of columns) if (column instanceof Float64Array) refuseLong(column);
+  return columns;
 }
 
-/** A whole number past 2^53 may have lost digits on the way: such a column is text and is read cell by cell. */
-function exactNumbers(values: Float64Array): Float64Array {
+/** A whole number past 2^53 may have lost digits on the way: such a column is read again, cell by cell. */
+function refuseLong(values: Float64Array): void {
   for (const value of values)
     if (Math.abs(value) >= Number.MAX_SAFE_INTEGER) throw new Error("a number too long to keep");
-  return values;
 }

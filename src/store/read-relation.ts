@@ -1,7 +1,7 @@
 import type { DuckDBConnection } from "@duckdb/node-api";
-import type { Column } from "../record/index.js";
-import { cellsOf, identifier, numbersOf } from "./database.js";
+import { identifier } from "./database.js";
 import type { FileColumns } from "./stored-table.js";
+import { type ColumnKind, streamColumns } from "./stream-columns.js";
 
 const numeric = /^(TINYINT|SMALLINT|INTEGER|UTINYINT|USMALLINT|UINTEGER|FLOAT|DOUBLE|DECIMAL)/;
 const long = /^(BIGINT|UBIGINT|HUGEINT|UHUGEINT)$/;
@@ -22,13 +22,7 @@ export async function readRelation(connection: DuckDBConnection, relation: strin
   );
   const kinds = columns.map(({ name, type }) => (wide.includes(name) ? "text" : kindOf(type)));
   const selected = columns.map(({ name }, i) => castOf(identifier(name), kinds[i]!));
-  const result = await connection.run(`SELECT ${selected.join(", ")} FROM ${relation}`);
-  const chunks = await result.fetchAllChunks();
-  const rows = chunks.reduce((sum, chunk) => sum + chunk.rowCount, 0);
-  const read = kinds.map((kind, i): Column => {
-    if (kind === "number") return numbersOf(chunks, i, rows);
-    return cellsOf(chunks, i, kind === "boolean" ? Boolean : String);
-  });
+  const read = await streamColumns(connection, `SELECT ${selected.join(", ")} FROM ${relation}`, kinds);
   return {
     names: columns.map(({ name }) => name),
     columns: read,
@@ -38,14 +32,12 @@ export async function readRelation(connection: DuckDBConnection, relation: strin
   };
 }
 
-type Kind = "number" | "boolean" | "text";
-
-function kindOf(type: string): Kind {
+function kindOf(type: string): ColumnKind {
   if (numeric.test(type) || long.test(type)) return "number";
   return type === "BOOLEAN" ? "boolean" : "text";
 }
 
-function castOf(name: string, kind: Kind): string {
+function castOf(name: string, kind: ColumnKind): string {
   if (kind === "number") return `coalesce(CAST(${name} AS DOUBLE), 'nan'::DOUBLE)`;
   return kind === "boolean" ? name : `CAST(${name} AS VARCHAR)`;
 }

@@ -59,8 +59,8 @@ describe("debt records", () => {
     expect(refused("closing = interest due + clsing")).toThrowErrorMatchingInlineSnapshot(`
       [ModelError: The sum could not be read.
           closing = interest due + clsing
-                                ^
-      It is one column, "=", and columns added and subtracted, such as closing = opening + interest - paid. Columns: "month", "interest due", "closing".]
+                                   ^
+      It is one column, "=", and columns added and subtracted, such as closing = opening + interest - paid. Columns: "month", "interest due", "closing". Did you mean "closing"?]
     `);
     expect(refused("closing is nothing")).toThrow("It is one column");
     expect(refused("closing = interest due *")).toThrow("The sum could not be read.");

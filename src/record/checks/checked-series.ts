@@ -39,11 +39,3 @@ export function noteSeries(series: CheckedSeries, kind: string, value: string, m
 export function inSeries({ group }: CheckedSeries): string {
   return group.name === "" ? "" : ` in "${group.name}"`;
 }
-
-/** Middle of a list; NaN of none. */
-export function middle(list: readonly number[]): number {
-  const sorted = [...list].sort((a, b) => a - b);
-  const half = sorted.length >> 1;
-  if (sorted.length % 2 === 1) return sorted[half]!;
-  return sorted.length === 0 ? Number.NaN : (sorted[half - 1]! + sorted[half]!) / 2;
-}

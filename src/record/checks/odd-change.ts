@@ -8,10 +8,9 @@ const largest = Math.log(4);
 export function oddChange(series: CheckedSeries): void {
   const { values, measured, group } = series;
   if (measured !== "level" || !values.every((value) => value > 0)) return;
-  const rates = Array.from(
-    values.subarray(1),
-    (value, i) => Math.log(value / values[i]!) / (group.index[i + 1]! - group.index[i]!),
-  );
+  const rates = new Float64Array(Math.max(0, values.length - 1));
+  for (let i = 0; i < rates.length; i++)
+    rates[i] = Math.log(values[i + 1]! / values[i]!) / (group.index[i + 1]! - group.index[i]!);
   for (const i of standsOut(rates)) {
     if (Math.abs(rates[i]!) > largest) continue;
     const change = Number((values[i + 1]! - values[i]!).toPrecision(6));

@@ -69,6 +69,6 @@ function termAt(
 }
 
 function unread(text: string, from: number, names: readonly string[]): Error {
-  const word = /[\p{L}\p{N}_ ]+/u.exec(text.slice(from))?.[0].trim() ?? "";
+  const word = /[\p{L}\p{N}_][\p{L}\p{N}_ ]*/u.exec(text.slice(from))?.[0].trim() ?? "";
   return identityUnread(text, text.indexOf(word, from), names, nearestNames(word, names));
 }

@@ -3,6 +3,7 @@ import type { DuplicateChoice } from "../observation-options.js";
 import type { ReplicateSpread } from "../observations.js";
 import type { PeriodAxis } from "../period/period-axis.js";
 import type { ReadColumns } from "../read-columns.js";
+import { pick } from "./pick.js";
 import { duplicatePeriod } from "./refusals.js";
 
 /** Rows of a series with one row a period, and how a column is carried over to them. */
@@ -60,7 +61,7 @@ function startsOfPeriods(rows: Int32Array, position: Float64Array): Int32Array {
 }
 
 function unmerged(rows: Int32Array): MergedRows {
-  const carry = (column: Float64Array): Float64Array => Float64Array.from(rows, (row) => column[row]!);
+  const carry = (column: Float64Array): Float64Array => pick(column, rows);
   const carrySide = (side: Int8Array): Int8Array => Int8Array.from(rows, (row) => side[row]!);
   return { rows, used: rows.length, carry, carrySide, spread: undefined };
 }

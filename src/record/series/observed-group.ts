@@ -8,6 +8,7 @@ import type { ReadColumns } from "../read-columns.js";
 import type { RowGroup } from "./group-rows.js";
 import { inOrder } from "./in-order.js";
 import { type MergedRows, mergeDuplicates } from "./merge-duplicates.js";
+import { pick } from "./pick.js";
 import { presentRows } from "./present-rows.js";
 
 /** One series of the record, and how many rows its values come from. */
@@ -32,7 +33,7 @@ export function observedGroup(
   const group: ObservedGroup = {
     name,
     index,
-    time: Float64Array.from(merged.rows, (row) => axis.time[row]!),
+    time: pick(axis.time, merged.rows),
     values: byState(columns, (state) => merged.carry(columns.values[state]!)),
     inputs: Object.fromEntries(
       Array.from(columns.inputs, ([input, column]) => [input, merged.carry(column)]),
