@@ -24,7 +24,16 @@ export {
   points,
   summary,
 } from "../src/estimate/index.js";
-export type { Check, CheckOptions, CompareOptions, Comparison } from "../src/evidence/index.js";
+export type {
+  ChangePoint,
+  ChangePointOptions,
+  Check,
+  CheckOptions,
+  CompareOptions,
+  Comparison,
+  DensityDependence,
+  DensityOptions,
+} from "../src/evidence/index.js";
 export { leastSquares, ModelError } from "../src/numeric/index.js";
 export type {
   Forecast,
@@ -43,6 +52,7 @@ export type {
 export type { ReadOptions, WriteOptions } from "../src/store/index.js";
 export { answer, type CaseOptions, closeCase, openCase } from "./commands/case.js";
 export type { Domain } from "./commands/cautions.js";
+export { changePoint, densityDependence } from "./commands/change-points.js";
 export { check } from "./commands/checks.js";
 export { best, sensitivity, tradeoff } from "./commands/choices.js";
 export { compare } from "./commands/comparisons.js";

@@ -32,3 +32,23 @@ export function refuseFewRefits(given: number, least: number): ModelError {
     { given, least },
   );
 }
+
+export function refuseNoDates(group: string, count: number): ModelError {
+  const who = group === "" ? "" : ` of "${group}"`;
+  return new ModelError(
+    "too-short-for-a-break",
+    `${count} steps${who} leave no date with enough of them on either side to fit the rule twice. Use a rule with ` +
+      "fewer constants, hold some with { fixed }, or wait for more rows.",
+    { group, count },
+  );
+}
+
+export function refuseNoDensity(group: string, state: string): ModelError {
+  const who = group === "" ? "" : ` of "${group}"`;
+  return new ModelError(
+    "no-density-test",
+    `The test needs at least four steps of one period between positive levels of ${state}${who}. Leave out levels of ` +
+      "zero with a reason, name the state with { state }, or wait for more rows.",
+    { group, state },
+  );
+}

@@ -1,0 +1,28 @@
+import type { Fit } from "../../estimate/index.js";
+import type { GroupChangePoint } from "./change-point.js";
+
+/** What a search for a break comes to, as a client would be told. */
+export function breakSentence(found: Omit<GroupChangePoint, "sentence">, fit: Fit, level: number): string {
+  const who = found.group === "" ? "" : `${found.group}: `;
+  const chance = `${Math.max(1, Math.round(100 * found.probability))}%`;
+  const { column } = fit.observations.period;
+  const named = (value: number): string => Number(value.toPrecision(6)).toString();
+  if (!found.found)
+    return (
+      `${who}No break is found: the largest difference, at ${column} ${named(found.date)}, would come up by chance in ` +
+      `${chance} of records without one.`
+    );
+  const shown = (value: number): string => Number(value.toPrecision(3)).toString();
+  const moved = Object.keys(found.before.constants)
+    .filter((name) => found.before.constants[name] !== found.after.constants[name])
+    .map(
+      (name) =>
+        `${name} from ${shown(found.before.constants[name]!)} to ${shown(found.after.constants[name]!)}`,
+    );
+  const less = found.probability < 0.01 ? "less than 1%" : chance;
+  return (
+    `${who}The rule changed from ${column} ${named(found.date)} on (${Math.round(100 * level)}% interval ` +
+    `${named(found.earliest)} to ${named(found.latest)}): ${moved.join(", ")}. By chance a difference as large comes up ` +
+    `in ${less} of records without a break. Project with the constants after it only.`
+  );
+}

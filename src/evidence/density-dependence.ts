@@ -1,0 +1,155 @@
+import { type RandomStream, randomStream } from "../numeric/index.js";
+import type { Observations, ObservedGroup } from "../record/index.js";
+import { refuseNoDensity } from "./refusals.js";
+
+/** Options of `densityDependence`. */
+export interface DensityOptions {
+  /** Default: the only state. */
+  readonly state?: string;
+  /** Records drawn without density dependence; default 1999. */
+  readonly draws?: number;
+  /** Default 1. */
+  readonly seed?: number;
+  /** Probability below which density dependence is called; default 0.05. */
+  readonly alpha?: number;
+}
+
+/** Whether growth falls with the level in one group. */
+export interface GroupDensity {
+  readonly group: string;
+  /** Steps of one period that were used. */
+  readonly steps: number;
+  /** ln(N'/N) = intercept + slope N by least squares. */
+  readonly intercept: number;
+  readonly slope: number;
+  /** Slope over its standard error. */
+  readonly statistic: number;
+  /** Of one as low in records that grow by chance alone. */
+  readonly probability: number;
+  readonly found: boolean;
+  readonly sentence: string;
+}
+
+/** A test of density dependence. */
+export interface DensityDependence {
+  readonly kind: "density-dependence";
+  readonly draws: number;
+  readonly alpha: number;
+  readonly groups: readonly GroupDensity[];
+  readonly sentence: string;
+}
+
+/**
+ * Tests whether growth a period falls with the level, against growth with a steady mean and chance.
+ *
+ * The slope of ln(N'/N) on N leans below zero even where the level does not matter, because the same error makes a level
+ * high and the next growth low; a t-test therefore finds density dependence far too often. Here the slope is held against
+ * slopes from records drawn by ln N' = ln N + a + s Z, with a and s from the record.
+ *
+ * @throws {ModelError} `no-density-test`.
+ * @see Dennis, B. and Taper, M. L. (1994), Density dependence in time series observations of natural populations:
+ *   estimation and testing, Ecological Monographs 64: the parametric bootstrap likelihood ratio test.
+ * @example densityDependence(counts).groups.length; // 2
+ */
+export function densityDependence(
+  observations: Observations,
+  options: DensityOptions = {},
+): DensityDependence {
+  const { draws = 1999, seed = 1, alpha = 0.05 } = options;
+  const state = options.state ?? observations.states[0]!.name;
+  let stream = randomStream(seed);
+  const groups = observations.groups.map((group) => {
+    const own = stream;
+    stream = stream.jump();
+    return groupDensity(group, state, draws, alpha, own);
+  });
+  const sentence = groups.map((group) => group.sentence).join(" ");
+  return Object.freeze({ kind: "density-dependence", draws, alpha, groups: Object.freeze(groups), sentence });
+}
+
+function groupDensity(
+  group: ObservedGroup,
+  state: string,
+  draws: number,
+  alpha: number,
+  stream: RandomStream,
+): GroupDensity {
+  const values = group.values[state];
+  const logs = values && Float64Array.from(values, Math.log);
+  const line = logs && lineOf(logs, group.index);
+  if (logs === undefined || line === undefined || logs.some((log) => !Number.isFinite(log)))
+    throw refuseNoDensity(group.name, state);
+  let below = 1;
+  const drawn = new Float64Array(logs.length);
+  for (let k = 0; k < draws; k++) {
+    walk(logs[0]!, line.growth, line.deviation, group.index, stream, drawn);
+    if ((lineOf(drawn, group.index)?.statistic ?? 0) <= line.statistic) below++;
+  }
+  const probability = below / (draws + 1);
+  const found = {
+    steps: line.steps,
+    intercept: line.intercept,
+    slope: line.slope,
+    statistic: line.statistic,
+  };
+  const sentence = sentenceOf(group.name, probability, alpha, line.steps);
+  return { group: group.name, ...found, probability, found: probability <= alpha, sentence };
+}
+
+/** Regression of growth on level, over pairs one period apart; undefined where fewer than 4 of them. */
+function lineOf(
+  logs: Float64Array,
+  index: Int32Array,
+): (Pick<GroupDensity, "steps" | "intercept" | "slope" | "statistic"> & Growth) | undefined {
+  const levels: number[] = [];
+  const growths: number[] = [];
+  for (let i = 1; i < logs.length; i++) {
+    if (index[i]! - index[i - 1]! !== 1) continue;
+    levels.push(Math.exp(logs[i - 1]!));
+    growths.push(logs[i]! - logs[i - 1]!);
+  }
+  const steps = levels.length;
+  if (steps < 4) return undefined;
+  const meanLevel = levels.reduce((sum, level) => sum + level, 0) / steps;
+  const growth = growths.reduce((sum, each) => sum + each, 0) / steps;
+  let [across, along, up] = [0, 0, 0];
+  levels.forEach((level, i) => {
+    along += (level - meanLevel) ** 2;
+    across += (level - meanLevel) * (growths[i]! - growth);
+    up += (growths[i]! - growth) ** 2;
+  });
+  const slope = across / along;
+  const error = Math.sqrt((up - slope * across) / (steps - 2) / along);
+  const deviation = Math.sqrt(up / (steps - 1));
+  return { steps, intercept: growth - slope * meanLevel, slope, statistic: slope / error, growth, deviation };
+}
+
+interface Growth {
+  /** Mean and standard deviation of ln(N'/N). */
+  readonly growth: number;
+  readonly deviation: number;
+}
+
+/** A record that grows by chance about a steady mean, at the recorded periods. */
+function walk(
+  start: number,
+  growth: number,
+  deviation: number,
+  index: Int32Array,
+  stream: RandomStream,
+  out: Float64Array,
+): void {
+  out[0] = start;
+  for (let i = 1; i < out.length; i++) {
+    const span = index[i]! - index[i - 1]!;
+    out[i] = out[i - 1]! + span * growth + Math.sqrt(span) * deviation * stream.normal();
+  }
+}
+
+function sentenceOf(group: string, probability: number, alpha: number, steps: number): string {
+  const who = group === "" ? "" : `${group}: `;
+  const chance = probability < 0.001 ? "less than 0.1%" : `${(100 * probability).toFixed(1)}%`;
+  return probability <= alpha
+    ? `${who}Growth falls with the level: chance alone gives a fall as steep in ${chance} of records (${steps} steps).`
+    : `${who}The record does not show that growth falls with the level: chance alone gives a fall as steep in ${chance} of records (${steps} steps).`;
+}
