@@ -43,6 +43,8 @@ export type {
   Simulation,
 } from "../src/projection/index.js";
 export type {
+  Correction,
+  Decision,
   DifferenceOptions,
   Differences,
   Finding,
@@ -56,6 +58,7 @@ export { changePoint, densityDependence } from "./commands/change-points.js";
 export { check } from "./commands/checks.js";
 export { best, sensitivity, tradeoff } from "./commands/choices.js";
 export { compare } from "./commands/comparisons.js";
+export { correct, type DecisionsLog, decisionsLog, undo } from "./commands/corrections.js";
 export { nextReading, reaches, solveFor } from "./commands/decisions.js";
 export { type Explanation, explain } from "./commands/explain.js";
 export { fit } from "./commands/fits.js";
