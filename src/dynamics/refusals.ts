@@ -3,11 +3,9 @@ import { ModelError, nearestNames } from "../numeric/index.js";
 const list = (names: readonly string[]): string => (names.length === 0 ? "none" : names.join(", "));
 
 export function missingValue(role: string, name: string, given: readonly string[]): ModelError {
-  const near = nearestNames(name, given);
-  const hint = near.length === 0 ? "" : ` "${near[0]}" was given; is it the same?`;
   return new ModelError(
     "missing-value",
-    `The rule needs a value for the ${role} "${name}", and none was given. Given: ${list(given)}.${hint}`,
+    `The rule needs a value for the ${role} "${name}", and none was given. Given: ${list(given)}.`,
     { role, name, given },
   );
 }
@@ -104,5 +102,12 @@ export function notAMatrixRule(): ModelError {
   return new ModelError(
     "not-a-matrix-rule",
     "The long run of a matrix is asked for, and this rule is no matrix with a positive dominant root: each line must be a sum of constants times states, as in n1[t+1] = f1*n1 + f2*n2. Use equilibria for other systems.",
+  );
+}
+
+export function pathLeaves(what: string): ModelError {
+  return new ModelError(
+    "path-leaves",
+    `${what} is a matter of the long run, and this path leaves the finite range. Use path to see in which period and why.`,
   );
 }

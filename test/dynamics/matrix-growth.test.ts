@@ -26,5 +26,7 @@ test("sensitivities are the slopes of the dominant root", () => {
 });
 
 test("a rule that is no matrix is refused", () => {
-  expect(() => matrixGrowth(recurrence("N[t+1] = 2*N + 1"))).toThrowErrorMatchingInlineSnapshot(`[ModelError: The long run of a matrix is asked for, and this rule is no matrix with a positive dominant root: each line must be a sum of constants times states, as in n1[t+1] = f1*n1 + f2*n2. Use equilibria for other systems.]`);
+  expect(() => matrixGrowth(recurrence("N[t+1] = 2*N + 1"))).toThrowErrorMatchingInlineSnapshot(
+    `[ModelError: The long run of a matrix is asked for, and this rule is no matrix with a positive dominant root: each line must be a sum of constants times states, as in n1[t+1] = f1*n1 + f2*n2. Use equilibria for other systems.]`,
+  );
 });

@@ -53,7 +53,9 @@ test.each([
 test("a named rule is not run outside its range", () => {
   expect(() =>
     path(rules.logistic(), { constants: { r: 2.5, K: 100 }, initial: { N: 150 }, periods: 3 }),
-  ).toThrowErrorMatchingInlineSnapshot(`[ModelError: Quadratic rule (discrete logistic) means what it says only where N0 >= 0 and N0 <= K*(1 + 1/r); given were N0 = 150, K = 100, r = 2.5. Choose values inside the range, or write the rule out with recurrence to run it regardless.]`);
+  ).toThrowErrorMatchingInlineSnapshot(
+    `[ModelError: Quadratic rule (discrete logistic) means what it says only where N0 >= 0 and N0 <= K*(1 + 1/r); given were N0 = 150, K = 100, r = 2.5. Choose values inside the range, or write the rule out with recurrence to run it regardless.]`,
+  );
 });
 
 test("inputs must reach as far as the path, and at [t+1] one further", () => {
@@ -62,24 +64,32 @@ test("inputs must reach as far as the path, and at [t+1] one further", () => {
   expect([...run.values["owed"]!]).toEqual([10, 9, 7, 4]);
   expect(() =>
     path(rule, { initial: { owed: 10 }, inputs: { paid: [0, 1, 2, 3] }, periods: 4 }),
-  ).toThrowErrorMatchingInlineSnapshot(`[ModelError: The input "paid" is needed at period 4, and the values given reach from period 0 to 3. Give values for every period of the path, or shorten it.]`);
+  ).toThrowErrorMatchingInlineSnapshot(
+    `[ModelError: The input "paid" is needed at period 4, and the values given reach from period 0 to 3. Give values for every period of the path, or shorten it.]`,
+  );
 });
 
 test("a rule with lags needs its history, oldest first", () => {
   const rule = recurrence("F[t+1] = F + F[t-2]");
   const run = path(rule, { initial: { F: [1, 2, 3] }, periods: 4 });
   expect([...run.values["F"]!]).toEqual([3, 4, 6, 9, 13]);
-  expect(() => path(rule, { initial: { F: 1 }, periods: 4 })).toThrowErrorMatchingInlineSnapshot(`[ModelError: The rule reads "F" up to 2 periods back, so it needs 3 first values, oldest first; 1 were given. Give initial: { F: [ ... ] } with 3 numbers.]`);
+  expect(() => path(rule, { initial: { F: 1 }, periods: 4 })).toThrowErrorMatchingInlineSnapshot(
+    `[ModelError: The rule reads "F" up to 2 periods back, so it needs 3 first values, oldest first; 1 were given. Give initial: { F: [ ... ] } with 3 numbers.]`,
+  );
 });
 
 test("missing and strange constants are refused by name", () => {
   const rule = rules.bevertonHolt();
   expect(() =>
     path(rule, { constants: { R: 2 }, initial: { N: 1 }, periods: 1 }),
-  ).toThrowErrorMatchingInlineSnapshot(`[ModelError: The rule needs a value for the constant "K", and none was given. Given: R. "R" was given; is it the same?]`);
+  ).toThrowErrorMatchingInlineSnapshot(
+    `[ModelError: The rule needs a value for the constant "K", and none was given. Given: R. "R" was given; is it the same?]`,
+  );
   expect(() =>
     path(rule, { constants: { R: 2, K: 1, k: 3 }, initial: { N: 1 }, periods: 1 }),
-  ).toThrowErrorMatchingInlineSnapshot(`[ModelError: The rule has no constant called "k". It has: R, K. Did you mean "K" or "R"?]`);
+  ).toThrowErrorMatchingInlineSnapshot(
+    `[ModelError: The rule has no constant called "k". It has: R, K. Did you mean "K" or "R"?]`,
+  );
 });
 
 // Source: the mean of a lognormal factor exp(s z - s^2/2) is 1, so the mean path is the path without noise for a

@@ -27,8 +27,19 @@ export function over(above: Interval, [c, d]: Interval): Interval {
   return times(above, ends);
 }
 
-export const plus = ([a, b]: Interval, [c, d]: Interval): Interval => outward(a + c, b + d);
-export const minus = ([a, b]: Interval, [c, d]: Interval): Interval => outward(a - d, b - c);
+/** An infinite end less an infinite end may be anything; no value at all stays none. */
+const settled = (low: number, high: number, none: boolean): Interval => {
+  if (none) return nowhere;
+  return outward(
+    Number.isNaN(low) ? Number.NEGATIVE_INFINITY : low,
+    Number.isNaN(high) ? Number.POSITIVE_INFINITY : high,
+  );
+};
+
+export const plus = ([a, b]: Interval, [c, d]: Interval): Interval =>
+  settled(a + c, b + d, Number.isNaN(a) || Number.isNaN(c));
+export const minus = ([a, b]: Interval, [c, d]: Interval): Interval =>
+  settled(a - d, b - c, Number.isNaN(a) || Number.isNaN(c));
 export const hull = ([a, b]: Interval, [c, d]: Interval): Interval => {
   if (Number.isNaN(a)) return [c, d];
   return Number.isNaN(c) ? [a, b] : [Math.min(a, c), Math.max(b, d)];

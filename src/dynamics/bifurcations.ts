@@ -1,0 +1,151 @@
+import { findRoot } from "../numeric/index.js";
+import type { Rule } from "../rule/index.js";
+import { foldPlace } from "./fold-place.js";
+import { type Followed, followCycle, settleInCycle } from "./follow-cycle.js";
+import { type HeldSetting, type HeldStep, holdStep } from "./held-step.js";
+import { oneStateOnly, strangeName, unreadableOption } from "./refusals.js";
+
+export interface BifurcationsOptions extends HeldSetting {
+  /** The constant that is varied. */
+  readonly constant: string;
+  /** Followed from here ... */
+  readonly from: number;
+  /** ... to here, up or down. */
+  readonly to: number;
+  /** First value from which the cycle to be followed is reached. */
+  readonly start: number;
+  /** At most so many places; default 8. */
+  readonly most?: number;
+}
+
+/** A value of a constant at which what is stable changes. */
+export interface Bifurcation {
+  /** Value of the constant. */
+  readonly at: number;
+  /** `flip`: a cycle of twice the period takes over; `fold`: the cycle meets an unstable one and both vanish. */
+  readonly kind: "flip" | "fold";
+  /** Period of the cycle that is left. */
+  readonly period: number;
+  /** Its values there. */
+  readonly points: readonly number[];
+}
+
+export interface Bifurcations {
+  readonly kind: "bifurcations";
+  readonly rule: Rule;
+  readonly constant: string;
+  readonly places: readonly Bifurcation[];
+  /** Why the following ended: `range` done, `most` found, or no cycle of period up to 128 to follow any more. */
+  readonly stop: "range" | "most" | "no-cycle";
+}
+
+interface Walk {
+  readonly held: HeldStep;
+  readonly slot: number;
+  readonly to: number;
+}
+
+interface Here {
+  readonly at: number;
+  readonly cycle: Followed;
+}
+
+function cycleAt({ held, slot }: Walk, at: number, near: readonly number[]): Followed | undefined {
+  held.constants[slot] = at;
+  return followCycle(held, near);
+}
+
+/** The flip between a stable place and one past it. */
+function flipBetween(walk: Walk, before: Here, after: Here): Bifurcation {
+  const near = (at: number): readonly number[] => {
+    const part = (at - before.at) / (after.at - before.at);
+    return before.cycle.points.map((x, i) => x + part * (after.cycle.points[i]! - x));
+  };
+  const at = findRoot((r) => (cycleAt(walk, r, near(r))?.slope ?? Number.NaN) + 1, before.at, after.at);
+  const points = cycleAt(walk, at, near(at))?.points ?? before.cycle.points;
+  return { at, kind: "flip", period: points.length, points };
+}
+
+type March = { readonly here: Here } | { readonly place: Bifurcation } | { readonly lost: true };
+
+/** Goes on along a cycle by one step; a step in which the cycle is lost is halved until a fold can be told. */
+function march(walk: Walk, here: Here, step: number): March {
+  for (let size = step; Math.abs(size) > 1e-9 * Math.max(Math.abs(here.at), 1e-3); size /= 2) {
+    const cycle = cycleAt(walk, here.at + size, here.cycle.points);
+    if (cycle === undefined || cycle.slope >= 1) continue;
+    const next = { at: here.at + size, cycle };
+    if (cycle.slope <= -1) return { place: flipBetween(walk, here, next) };
+    return { here: next };
+  }
+  const fold = foldPlace(walk.held, walk.slot, { points: here.cycle.points, at: here.at });
+  if (fold === undefined) return { lost: true };
+  return { place: { at: fold.at, kind: "fold", period: fold.points.length, points: fold.points } };
+}
+
+/** The stable cycle a little past a place, on which the walk goes on. */
+function beyond(walk: Walk, place: Bifurcation, gap: number): Here | undefined {
+  const at = place.at + gap;
+  walk.held.constants[walk.slot] = at;
+  const cycle = settleInCycle(walk.held, place.points[0]! * (1 + 1e-6) + 1e-12);
+  if (cycle === undefined || Math.abs(cycle.slope) >= 1) return undefined;
+  return { at, cycle };
+}
+
+/** The next place on the way, and steps of a size that the way so far calls for. */
+function nextPlace(walk: Walk, from: Here, step: number): Bifurcation | Bifurcations["stop"] {
+  let here = from;
+  while (Math.sign(walk.to - here.at) === Math.sign(step)) {
+    const left = walk.to - here.at;
+    const result = march(walk, here, Math.abs(step) > Math.abs(left) ? left : step);
+    if ("lost" in result) return "no-cycle";
+    if ("place" in result) return result.place;
+    here = result.here;
+  }
+  return "range";
+}
+
+function follow(walk: Walk, start: Here, most: number): Pick<Bifurcations, "places" | "stop"> {
+  const places: Bifurcation[] = [];
+  let step = (walk.to - start.at) / 200;
+  for (let here: Here | undefined = start; here !== undefined; ) {
+    const place = nextPlace(walk, here, step);
+    if (typeof place === "string") return { places, stop: place };
+    const last = places.at(-1);
+    places.push(place);
+    if (places.length >= most) return { places, stop: "most" };
+    // A cascade shrinks by about 4.669 from one doubling to the next, so steps shrink with it.
+    if (last !== undefined && place.kind === "flip") step = (place.at - last.at) / 40;
+    here = beyond(walk, place, step);
+  }
+  return { places, stop: "no-cycle" };
+}
+
+/**
+ * Follows a stable cycle of a rule of one state while a constant is varied, and finds where it loses its hold: the
+ * root of the cycle's multiplier at -1 (period doubling) or the meeting of two cycles at +1, not a place read off a
+ * picture.
+ *
+ * @throws {ModelError} `one-state-only` | `unknown-name` | `missing-value` | `unreadable-option`.
+ * @example bifurcations(recurrence("x[t+1] = r*x*(1 - x)"), { constant: "r", from: 2.8, to: 3.3, start: 0.3 }).places[0].at.toFixed(9); // "3.000000000"
+ */
+export function bifurcations(rule: Rule, options: BifurcationsOptions): Bifurcations {
+  const { constant, from, to, start, most = 8 } = options;
+  if (rule.states.length !== 1 || rule.memory.length > 0) throw oneStateOnly("A bifurcation", rule.states);
+  const slot = rule.constants.indexOf(constant);
+  if (slot < 0) throw strangeName("constant", constant, rule.constants);
+  if (!Number.isFinite(from) || !Number.isFinite(to) || from === to) {
+    throw unreadableOption("to", `a number other than from, ${from}`, to);
+  }
+  const setting = { ...options, constants: { ...options.constants, [constant]: from } };
+  const walk: Walk = { held: holdStep(rule, setting, "bifurcation"), slot, to };
+  const cycle = settleInCycle(walk.held, start);
+  const found =
+    cycle === undefined ? { places: [], stop: "no-cycle" as const } : follow(walk, { at: from, cycle }, most);
+  return Object.freeze({
+    kind: "bifurcations",
+    rule,
+    constant,
+    places: Object.freeze(found.places),
+    stop: found.stop,
+  });
+}

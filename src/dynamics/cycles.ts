@@ -1,0 +1,90 @@
+import type { Interval, Rule } from "../rule/index.js";
+import { cyclesOfOneState } from "./cycle-points.js";
+import { type HeldSetting, type HeldStep, holdStep } from "./held-step.js";
+import { type Multiplier, multipliersOf } from "./multiplier.js";
+import { oneStateOnly, unreadableOption } from "./refusals.js";
+import { type SearchRange, searchRanges } from "./search-range.js";
+import { type Stability, stabilityOf } from "./stability.js";
+
+/** Values that come round again after a number of periods, and not before. */
+export interface Cycle extends Stability {
+  /** The values in turn, the lowest first. */
+  readonly points: readonly number[];
+  /** Product of the slopes along the cycle. */
+  readonly multiplier: Multiplier;
+  /** Largest gap between a step from one point and the next point. */
+  readonly residual: number;
+  /** A multiplier of zero: gaps vanish faster than by any factor. */
+  readonly superstable: boolean;
+  readonly sentence: string;
+}
+
+export interface Cycles {
+  readonly kind: "cycles";
+  readonly rule: Rule;
+  readonly period: number;
+  readonly constants: Readonly<Record<string, number>>;
+  readonly within: Interval;
+  readonly cycles: readonly Cycle[];
+  /** `every` = none in the range can be missing; `cut-short` = the search ran out of patience. */
+  readonly search: "every" | "cut-short";
+}
+
+export interface CyclesOptions extends HeldSetting {
+  /** Periods until the values come round; a whole number from 1. */
+  readonly period: number;
+  /** Default: the rule's bounds, else a million times the largest constant either way. */
+  readonly within?: SearchRange;
+}
+
+const shown = (value: number): string => String(Number(value.toPrecision(6)));
+
+function described(held: HeldStep, points: readonly number[]): Cycle {
+  const state = new Float64Array(1);
+  let slope = 1;
+  let residual = 0;
+  points.forEach((x, i) => {
+    state[0] = x;
+    const { next, matrix } = held.slopes(state);
+    slope *= matrix[0]!;
+    residual = Math.max(residual, Math.abs(next[0]! - points[(i + 1) % points.length]!));
+  });
+  const [multiplier] = multipliersOf(Float64Array.of(slope), 1);
+  const stability = stabilityOf([multiplier!]);
+  const list = points.map(shown).join(", ");
+  return Object.freeze({
+    points: Object.freeze([...points]),
+    multiplier: multiplier!,
+    residual,
+    superstable: Math.abs(slope) < 1e-9,
+    ...stability,
+    sentence: `The cycle of ${points.length} values ${list} ${stability.words}.`,
+  });
+}
+
+/**
+ * Finds all cycles of a period by solving f(f(...x)) = x over a range, not by waiting for values to repeat: unstable
+ * ones are found too, and none in the range is lost.
+ *
+ * @throws {ModelError} `one-state-only` | `unreadable-option` | `missing-value` | `rule-changes-with-time`.
+ * @example cycles(recurrence("x[t+1] = 3.2*x*(1 - x)"), { period: 2, within: [0, 1] }).cycles[0].multiplier.re.toFixed(6); // "0.160000"
+ */
+export function cycles(rule: Rule, options: CyclesOptions): Cycles {
+  const { period } = options;
+  if (rule.states.length !== 1 || rule.memory.length > 0) throw oneStateOnly("A cycle", rule.states);
+  if (!Number.isSafeInteger(period) || period < 1 || period > 64) {
+    throw unreadableOption("period", "a whole number from 1 to 64", period);
+  }
+  const held = holdStep(rule, options, "cycle");
+  const within = searchRanges(rule, held.constants, options.within)[0]!;
+  const found = cyclesOfOneState(held, period, within);
+  return Object.freeze({
+    kind: "cycles",
+    rule,
+    period,
+    constants: Object.freeze(Object.fromEntries(rule.constants.map((name, i) => [name, held.constants[i]!]))),
+    within,
+    cycles: Object.freeze(found.cycles.map((points) => described(held, points))),
+    search: found.complete ? "every" : "cut-short",
+  });
+}

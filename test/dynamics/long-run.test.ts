@@ -1,0 +1,264 @@
+import { expect, test } from "vitest";
+import {
+  attractor,
+  basins,
+  bifurcations,
+  cobweb,
+  cycles,
+  equilibria,
+  exponent,
+  horizon,
+  path,
+} from "../../src/dynamics/index.js";
+import { recurrence, rules } from "../../src/rule/index.js";
+
+const quadratic = recurrence("x[t+1] = r*x*(1 - x)");
+const unit = [0, 1] as const;
+const relative = (value: number, expected: number): number => Math.abs(value / expected - 1);
+
+// Source: period-doubling values of the quadratic map, the first 3 and 1 + sqrt 6 exactly, the next two as in
+// published tables, the rest by Newton's method on the period-n orbit with multiplier -1 (12 decimals; some tables
+// misprint the fifth as 3.568750). Limit 3.5699456718709449 and ratio 4.669201609102990: Feigenbaum (1978).
+const doublings = [
+  3, 3.449489742783, 3.544090359552, 3.564407266095, 3.568759419544, 3.569691609801, 3.569891259378,
+];
+
+test("period doublings of the quadratic map are found to 1e-9", () => {
+  const { places, stop } = bifurcations(quadratic, {
+    constant: "r",
+    from: 2.8,
+    to: 3.6,
+    start: 0.3,
+    most: 7,
+  });
+  expect(stop).toBe("most");
+  expect(places.map(({ kind, period }) => [kind, period])).toEqual(
+    [1, 2, 4, 8, 16, 32, 64].map((n) => ["flip", n]),
+  );
+  places.forEach(({ at }, i) => {
+    expect(relative(at, doublings[i]!)).toBeLessThan(1e-9);
+  });
+  // Successive ratios, 8 decimals, held to 1e-4; they lead to the limit 3.56994567187 by their geometric sum.
+  const gaps = places.slice(1).map(({ at }, i) => at - places[i]!.at);
+  const ratios = gaps.slice(1).map((gap, i) => gaps[i]! / gap);
+  [4.75144622, 4.65625102, 4.66824224, 4.66873947, 4.66913215].forEach((ratio, i) => {
+    expect(Math.abs(ratios[i]! - ratio)).toBeLessThan(1e-4);
+  });
+  const limit = places.at(-1)!.at + gaps.at(-1)! / (4.66920160910299 - 1);
+  expect(relative(limit, 3.569945671870945)).toBeLessThan(1e-8);
+});
+
+// Source: the same points for N + r N (1 - N/K), where mu = 1 + r: 2, 2.449490, 2.544090, 2.564407 (6 decimals).
+test("period doublings of the crowding rule are those of the quadratic map less one", () => {
+  const { places } = bifurcations(recurrence("ΔN = r*N*(1 - N/K)"), {
+    constant: "r",
+    constants: { K: 1000 },
+    from: 1.7,
+    to: 2.57,
+    start: 300,
+    most: 4,
+  });
+  places.forEach(({ at }, i) => {
+    expect(relative(at, doublings[i]! - 1)).toBeLessThan(1e-9);
+  });
+  expect(places).toHaveLength(4);
+});
+
+// Source: Newton's method on the period-n orbit with multiplier -1, 12 decimals; recalled as 2.5265, 2.6564, 2.6924.
+test("period doublings of the Ricker rule are found to 1e-9", () => {
+  const { places } = bifurcations(recurrence("x[t+1] = x*exp(r*(1 - x))"), {
+    constant: "r",
+    from: 1.8,
+    to: 2.7,
+    start: 0.3,
+    most: 5,
+  });
+  [2, 2.526467725854, 2.656353265157, 2.684623358294, 2.690708802601].forEach((value, i) => {
+    expect(relative(places[i]!.at, value)).toBeLessThan(1e-9);
+  });
+});
+
+// Source: the period-3 window opens at 1 + sqrt 8 exactly.
+test("the period-3 window opens where two cycles meet, at 1 + sqrt 8", () => {
+  const { places } = bifurcations(quadratic, { constant: "r", from: 3.835, to: 3.82, start: 0.3, most: 1 });
+  expect(places[0]!.kind).toBe("fold");
+  expect(places[0]!.period).toBe(3);
+  expect(relative(places[0]!.at, 1 + Math.sqrt(8))).toBeLessThan(1e-9);
+});
+
+// Source: roots of the quadratic for the 2-cycle, 16 decimals; the multiplier 4 + 2 r - r^2 = 0.16.
+test("the 2-cycle of the quadratic map at 3.2", () => {
+  const found = cycles(quadratic, { period: 2, constants: { r: 3.2 }, within: unit });
+  expect(found.search).toBe("every");
+  expect(found.cycles).toHaveLength(1);
+  const [cycle] = found.cycles;
+  expect(relative(cycle!.points[0]!, 0.5130445095326299)).toBeLessThan(1e-12);
+  expect(relative(cycle!.points[1]!, 0.7994554904673701)).toBeLessThan(1e-12);
+  expect(cycle!.multiplier.re).toBeCloseTo(0.16, 12);
+  expect(cycle!.verdict).toBe("stable");
+});
+
+// Source: general tables of the quadratic map, 7 decimals: the 4-cycle at 3.5, the 3-cycle at 3.83.
+test("the 4-cycle at 3.5 and both 3-cycles at 3.83", () => {
+  const four = cycles(quadratic, { period: 4, constants: { r: 3.5 }, within: unit }).cycles;
+  expect(four).toHaveLength(1);
+  expect([...four[0]!.points].sort()).toEqual(
+    [0.3828197, 0.5008842, 0.8269407, 0.8749973].map((x) => expect.closeTo(x, 7)),
+  );
+  const three = cycles(quadratic, { period: 3, constants: { r: 3.83 }, within: unit }).cycles;
+  expect(three.map(({ verdict }) => verdict).sort()).toEqual(["stable", "unstable"]);
+  const stable = three.find(({ verdict }) => verdict === "stable")!;
+  expect([...stable.points].sort()).toEqual(
+    [0.1561493, 0.5046665, 0.9574166].map((x) => expect.closeTo(x, 7)),
+  );
+});
+
+// Source: counting: x' = 4x(1 - x) has (2^p - 2)/p cycles of prime period p, all unstable with multiplier of size 2^p.
+test.each([3, 5, 7])("all cycles of period %d of the chaotic quadratic map are found", (period) => {
+  const found = cycles(quadratic, { period, constants: { r: 4 }, within: unit }).cycles;
+  expect(found).toHaveLength((2 ** period - 2) / period);
+  for (const cycle of found) expect(cycle.multiplier.modulus / 2 ** period).toBeCloseTo(1, 6);
+});
+
+// Source: ln(1/2); 1/2 ln abs(4 + 2r - r^2); the product of slopes of the 4-cycle: 12, 12 and 4 decimals.
+test.each([
+  [2.5, Math.log(0.5), 1e-9],
+  [3.2, -0.916290731874, 1e-9],
+  [3.5, -0.8725, 1e-4],
+])("the exponent of the quadratic map at %d is %d", (r, value, tolerance) => {
+  const found = exponent(quadratic, {
+    constants: { r },
+    initial: { x: 0.3 },
+    periods: 30_000,
+    discard: 2_000,
+  });
+  expect(relative(found.value, value)).toBeLessThan(tolerance);
+  if (tolerance === 1e-9) {
+    expect(found.interval[0]).toBeLessThanOrEqual(value + 1e-12);
+    expect(found.interval[1]).toBeGreaterThanOrEqual(value - 1e-12);
+  }
+  expect(found.verdict).toBe("not chaotic");
+});
+
+// Source: ln 2 exactly at 4; 0.496 and 0.355 at 3.9 and 3.7, to 0.002 (published figures read to 3 decimals).
+test.each([
+  [4, Math.LN2, 1e-3],
+  [3.9, 0.496, 2e-3],
+  [3.7, 0.355, 2e-3],
+])("the exponent of the quadratic map at %d is %d, within the interval", (r, value, tolerance) => {
+  const found = exponent(quadratic, { constants: { r }, initial: { x: 0.3 }, periods: 300_000, level: 0.99 });
+  expect(Math.abs(found.value - value)).toBeLessThan(tolerance);
+  expect(found.interval[0] - tolerance / 2).toBeLessThan(value);
+  expect(found.interval[1] + tolerance / 2).toBeGreaterThan(value);
+  expect(found.verdict).toBe("chaotic");
+});
+
+// Source: slope 1 - b(1 - lam^(-1/b)), printed to 12 decimals.
+test.each([
+  [1, 0.1],
+  [2, -0.367544467966],
+])("the multiplier of the Hassell rule with b = %d is %d", (b, slope) => {
+  const { points } = equilibria(rules.hassell(), { constants: { lam: 10, a: 0.01, b }, within: [1, 5000] });
+  expect(points[0]!.multipliers[0]!.re).toBeCloseTo(slope, 11);
+});
+
+// Source: roots of the quadratic for both coordinates and of the characteristic polynomial, 13 and 8 decimals.
+test("the fixed points of a quadratic map of the plane and their multipliers", () => {
+  const rule = recurrence("x[t+1] = 1 - a*x^2 + y\ny[t+1] = b*x");
+  const { points } = equilibria(rule, { constants: { a: 1.4, b: 0.3 }, within: { x: [-3, 3], y: [-3, 3] } });
+  expect(points).toHaveLength(2);
+  const expected = [
+    { x: -1.1313544770895, y: -0.3394063431269, roots: [3.2598221, -0.09202956] },
+    { x: 0.6313544770895, y: 0.1894063431269, roots: [-1.92373886, 0.15594632] },
+  ];
+  points.forEach((point, i) => {
+    expect(relative(point.at["x"]!, expected[i]!.x)).toBeLessThan(1e-12);
+    expect(relative(point.at["y"]!, expected[i]!.y)).toBeLessThan(1e-12);
+    expect(point.multipliers.map(({ re }) => re)).toEqual(
+      expected[i]!.roots.map((root) => expect.closeTo(root, 8)),
+    );
+  });
+});
+
+// Source: eigenvalues of the host-parasitoid rule, 8 decimals; their product lam ln lam/(lam - 1) exceeds 1.
+test("the host-parasitoid rest level turns outward", () => {
+  const { points } = equilibria(rules.nicholsonBailey(), {
+    constants: { lam: 2, a: 0.1, c: 1 },
+    within: { H: [1, 100], P: [1, 100] },
+  });
+  const [first] = points[0]!.multipliers;
+  expect(first!.re).toBeCloseTo(0.84657359, 8);
+  expect(Math.abs(first!.im)).toBeCloseTo(0.8182955, 8);
+  expect(first!.modulus).toBeCloseTo(1.17741002, 8);
+  expect(first!.modulus ** 2).toBeCloseTo((2 * Math.LN2) / 1, 12);
+});
+
+// Source: Levin and May (1976): stable if and only if r < 2 cos(pi T/(2 T + 1)); exact.
+test.each([0, 1, 2, 3])("density acting %d periods late is stable up to the known limit", (lag) => {
+  const limit = 2 * Math.cos((Math.PI * lag) / (2 * lag + 1));
+  const verdict = (r: number) =>
+    equilibria(rules.delayedDensity({ lag }), { constants: { r, K: 100 }, within: [50, 150] }).points[0]!;
+  expect(verdict(limit * 0.999).verdict).toBe("stable");
+  expect(verdict(limit * 1.001).verdict).toBe("unstable");
+  expect(verdict(limit).boundary).toBe(lag === 0 ? "flip" : "neimark-sacker");
+});
+
+test("an attractor diagram shows the known cycles", () => {
+  const diagram = attractor(quadratic, {
+    constant: "r",
+    from: 3.2,
+    to: 3.5,
+    columns: 2,
+    points: 8,
+    starts: [0.3],
+  });
+  expect(new Set([...diagram.values.subarray(0, 8)].map((x) => x.toFixed(9))).size).toBe(2);
+  expect(new Set([...diagram.values.subarray(8)].map((x) => x.toFixed(9))).size).toBe(4);
+});
+
+test("a collapse level divides the basins, with the chance of each", () => {
+  const found = basins(rules.allee(), {
+    constants: { r: 0.2, K: 100, A: 20 },
+    within: [0, 110],
+    known: { mean: 20, sd: 5 },
+  });
+  expect(found.borders).toHaveLength(1);
+  expect(found.borders[0]).toBeCloseTo(20, 9);
+  expect(found.basins.map(({ attractor: values }) => Math.round(values[0]!))).toEqual([0, 100]);
+  expect(found.basins.map(({ probability }) => probability)).toEqual([
+    expect.closeTo(0.5, 9),
+    expect.closeTo(0.5, 9),
+  ]);
+});
+
+// Source: ln(tolerance/error)/ln 2 with the exponent ln 2 of the chaotic quadratic map.
+test("the horizon is the logarithm of the ratio over the exponent", () => {
+  const found = horizon(quadratic, { constants: { r: 4 }, initial: { x: 0.3 }, error: 1e-6, tolerance: 0.1 });
+  expect(Math.abs(found.periods - Math.log(1e5) / Math.LN2)).toBeLessThan(0.1);
+});
+
+test("a cobweb goes from the line to the curve and back", () => {
+  const web = cobweb(quadratic, { constants: { r: 2.8 }, initial: { x: 0.2 }, periods: 20 });
+  const run = path(quadratic, { constants: { r: 2.8 }, initial: { x: 0.2 }, periods: 20 });
+  expect(web.web.y[1]).toBe(run.values["x"]![1]);
+  expect(web.web.x).toHaveLength(41);
+  expect(web.equilibria.map(({ verdict }) => verdict)).toContain("stable");
+});
+
+// Source: R. Lambert W form u = W(e^(1 - r)), S = K(1 - u)/r, rate 1 - u, r = 1, 10 decimals: the catch is largest
+// where the slope of the rule is 1, and that place is an equilibrium under the catch.
+test("largest sustainable catches of the Ricker and Beverton-Holt rules leave a fold", () => {
+  const ricker = equilibria(recurrence("N[t+1] = N*exp(r*(1 - N/K)) - H"), {
+    constants: { r: 1, K: 1000, H: 330.3661247616807 },
+    within: [100, 900],
+  });
+  expect(ricker.points.at(-1)!.at["N"]).toBeCloseTo(432.8567095902, 2);
+  expect(Math.abs(ricker.points.at(-1)!.multipliers[0]!.re - 1)).toBeLessThan(1e-4);
+  // K/(R - 1)(sqrt R - 1) and K/(R - 1)(sqrt R - 1)^2 for R 2, K 1000 in the form R N/(1 + (R - 1) N/K).
+  const holt = equilibria(recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K) - H"), {
+    constants: { R: 2, K: 1000, H: 1000 * (Math.SQRT2 - 1) ** 2 },
+    within: [100, 900],
+  });
+  expect(holt.points.at(-1)!.at["N"]).toBeCloseTo(414.213562373, 3);
+  expect(1000 * (Math.SQRT2 - 1) ** 2).toBeCloseTo(171.572875254, 9);
+});
