@@ -1,4 +1,5 @@
-import { escapeHtml, look, raised, type Table, tableHtml, typeface } from "../tables/index.js";
+import { createHash } from "node:crypto";
+import { escapeHtml, look, oneLine, raised, type Table, tableHtml, typeface } from "../tables/index.js";
 import type { Figure } from "./figure.js";
 import { figureAccount } from "./figure-account.js";
 import { plotSpec } from "./plot-spec.js";
@@ -19,46 +20,55 @@ export interface FigureParts {
 
 /**
  * A figure as HTML: a picture, replaced by the live plot where scripts run and kept for print; its notes; and the
- * numbers behind it, folded away.
+ * numbers behind it, folded away. The picture carries the title, so the page's own title is filled in by the script.
  */
 export function figureHtml({ figure, numbers, notes, picture, library }: FigureParts): string {
+  const title = escapeHtml(figure.title);
   const account = escapeHtml(figureAccount(figure).join(" "));
   const image = picture
-    ? `<img class="pw-picture" src="data:image/png;base64,${picture}" alt="${escapeHtml(figure.title)}. ${account}" style="max-width:100%;height:auto">`
+    ? `<img class="pw-picture" src="data:image/png;base64,${picture}" alt="${title}. ${account}" style="max-width:100%;height:auto">`
     : "";
   const shownNotes = notes.map((note) => `<p dir="auto">${escapeHtml(raised(note))}</p>`).join("");
+  const plot = plotJson(figure);
+  // By what it draws: the same figure shown twice is drawn twice, each time in the next box that waits for it.
+  const name = createHash("sha256").update(plot).digest("hex").slice(0, 16);
   return [
-    `<div class="pw-figure${picture ? " pw-pictured" : ""}">${figureStyle}`,
-    `<div class="pw-title" dir="auto">${escapeHtml(figure.title)}</div>`,
-    `<div class="pw-live" role="img" aria-label="${escapeHtml(figure.title)}. ${account}"></div>${image}`,
+    `<div class="pw-figure${picture ? " pw-pictured" : ""} pw-${name}">${figureStyle}`,
+    `<div class="pw-title" dir="auto">${picture ? "" : title}</div>`,
+    `<div class="pw-live" role="img" aria-label="${title}. ${account}"></div>${image}`,
     shownNotes === "" ? "" : `<div class="pw-notes">${shownNotes}</div>`,
     `<details><summary>Numbers behind this figure</summary><p dir="auto">${account}</p>`,
     `${numbers.map(tableHtml).join("")}</details></div>`,
-    `<script>${drawingScript(figure)}</script>${library}`,
+    `<script>(function(){var s=${plot},name="pw-${name}";${drawing}})()</script>${library}`,
   ].join("");
 }
 
-/** Finds its own box through the script element's place, so that no name need be unique in a notebook. */
-function drawingScript(figure: Figure): string {
+/** What the script draws: traces, a layout for each width, and the title, safe inside a script element. */
+function plotJson(figure: Figure): string {
   const wide = plotSpec(figure, widths.wide, false);
   const narrow = plotSpec(figure, widths.narrow, false);
-  const json = JSON.stringify({ data: wide.data, wide: wide.layout, narrow: narrow.layout })
+  return JSON.stringify({
+    title: oneLine(figure.title),
+    data: wide.data,
+    wide: wide.layout,
+    narrow: narrow.layout,
+  })
     .replace(/</g, "\\u003c")
     .replace(/\u2028/g, "\\u2028")
     .replace(/\u2029/g, "\\u2029");
-  return `(function(){var s=${json};${drawing}})()`;
 }
 
+// Where the script stands is not known: a notebook's page runs it from elsewhere.
 const drawing = `
-var box=document.currentScript&&document.currentScript.previousElementSibling;
-if(!box||!box.classList.contains("pw-figure")){var all=document.querySelectorAll(".pw-figure:not(.pw-drawn)");box=all[all.length-1]}
+var box=document.querySelector("."+name+":not(.pw-drawn)");
 if(!box)return;
 box.classList.add("pw-drawn");
 var live=box.querySelector(".pw-live");
 function shape(){return live.clientWidth<560?"narrow":"wide"}
-function layout(){var l=JSON.parse(JSON.stringify(s[shape()]));l.width=Math.max(260,Math.min(live.clientWidth||760,1000));return l}
+function layout(){var l=JSON.parse(JSON.stringify(s[shape()]));l.dragmode=shape()==="narrow"?false:"zoom";l.width=Math.max(260,Math.min(live.clientWidth||760,1000));return l}
 function draw(plot){
 box.classList.add("pw-shown");
+box.querySelector(".pw-title").textContent=s.title;
 var last=0;
 function again(){var w=live.clientWidth;if(!w||w===last)return;last=w;plot.react(live,s.data,layout(),{displaylogo:false,displayModeBar:"hover",modeBarButtonsToRemove:["select2d","lasso2d","autoScale2d"]})}
 again();

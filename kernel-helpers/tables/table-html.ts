@@ -45,14 +45,19 @@ function numberHtml(text: string): string {
   return power ? `${minus(power[1] ?? "")}×10<sup>${minus(power[2] ?? "")}</sup>` : minus(text);
 }
 
+/**
+ * The button has no text of its own and is no known element: where scripts are taken out of a page nothing of it is
+ * left, instead of a button that does nothing.
+ */
 function copyButton(table: Table): string {
   if (table.rows.length > copied) return "";
   const copy =
     "var b=this,t=document.createElement('textarea');t.value=b.getAttribute('data-copy');" +
     "t.style.position='fixed';t.style.opacity=0;document.body.appendChild(t);t.select();" +
-    "b.textContent=document.execCommand('copy')?'Copied':'Not copied';t.remove()";
+    "b.setAttribute('data-said',document.execCommand('copy')?'Copied':'Not copied');t.remove()";
   const text = escapeHtml(tabSeparated(table)).replace(/\n/g, "&#10;").replace(/\t/g, "&#9;");
-  return `<button type="button" class="pw-copy" data-copy="${text}" onclick="${copy}">Copy</button>`;
+  const keyed = "if(event.key==='Enter'||event.key===' '){event.preventDefault();this.click()}";
+  return `<pw-copy role="button" tabindex="0" aria-label="Copy as tab-separated text" data-said="Copy" data-copy="${text}" onclick="${copy}" onkeydown="${keyed}"></pw-copy>`;
 }
 
 // Each selector names the box twice, to win over what a notebook's own page says about tables.
@@ -73,6 +78,7 @@ ${box} tfoot td{font-weight:600;border-top:2px solid ${look.quiet}}
 ${box} .pw-gap{text-align:center;color:${look.quiet}}
 ${box} .pw-notes{color:${look.quiet};font-size:13px;margin:.4em 0 0}
 ${box} .pw-notes p{margin:.15em 0;overflow-wrap:anywhere}
-${box} .pw-copy{font:inherit;font-size:12px;color:${look.accent};background:${look.paper};border:1px solid ${look.line};border-radius:3px;padding:.1em .7em;margin:.4em 0 0;cursor:pointer}
-@media print{${box} .pw-copy{display:none}${box} tr{break-inside:avoid}${box} .pw-scroll{overflow:visible}${box} table{font-size:8.5pt}${box} th,${box} td{padding:.2em .45em}}
+${box} pw-copy::before{content:attr(data-said)}
+${box} pw-copy{display:inline-block;font:inherit;font-size:12px;color:${look.accent};background:${look.paper};border:1px solid ${look.line};border-radius:3px;padding:.1em .7em;margin:.4em 0 0;cursor:pointer}
+@media print{${box} pw-copy{display:none}${box} tr{break-inside:avoid}${box} .pw-scroll{overflow:visible}${box} table{font-size:8.5pt}${box} th,${box} td{padding:.2em .45em}}
 </style>`;
