@@ -1,14 +1,12 @@
 import type { Warning } from "../numeric/index.js";
 import type { Observations } from "../record/index.js";
 import type { Rule } from "../rule/index.js";
+import { checkOptions } from "./check-options.js";
 import { conventionsOf } from "./conventions.js";
 import { fitGroup } from "./fit-group.js";
 import type { FitOptions } from "./fit-options.js";
 import type { GroupFit } from "./group-fit.js";
 import { matchStates } from "./match-states.js";
-import { refuseMissingErrors } from "./refusals.js";
-
-const errorKinds: readonly unknown[] = ["process", "observation", "both"];
 
 /** A rule with its constants estimated from a record, each group on its own. */
 export interface Fit {
@@ -34,8 +32,9 @@ export interface Fit {
  * @param observations - per group at least as many values (pairs) as unknowns + 3; gaps stay gaps.
  * @returns estimates with standard errors (sigma^2 = RSS/(n - p)), profile and Wald intervals, residuals, stop
  *   reason and warnings, a group at a time.
- * @throws {ModelError} `errors-not-stated` | `states-not-recorded` | `too-few-observations` | `no-change` |
- *   `no-logarithm` | `no-finite-start` | `unknown-name` | `start-outside-bounds` | `input-not-recorded`.
+ * @throws {ModelError} `errors-not-stated` | `unknown-spread` | `bad-spread` | `factor-without-trajectory` | `rule-jumps` |
+ *   `states-not-recorded` | `too-few-observations` | `no-change` | `no-logarithm` | `not-a-count` | `all-censored` |
+ *   `no-finite-start` | `unknown-name` | `start-outside-bounds` | `input-not-recorded` | `input-missing-in-period`.
  * @see Bates, D. M. and Watts, D. G. (1988), Nonlinear Regression Analysis and Its Applications, chapters 2 and 6.
  * @example
  * const crowding = recurrence("ΔN = r*N*(1 - N/K)");
@@ -43,7 +42,7 @@ export interface Fit {
  * fit(crowding, counts, { errors: "observation" }).groups[0].stop.kind; // "converged"
  */
 export function fit(rule: Rule, observations: Observations, options: FitOptions): Fit {
-  if (!errorKinds.includes(options?.errors)) throw refuseMissingErrors();
+  checkOptions(rule, options);
   const matched = matchStates(rule, observations);
   const groups = matched.groups.map((group) => fitGroup(rule, group, options));
   return Object.freeze({

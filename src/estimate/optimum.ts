@@ -78,10 +78,15 @@ function rivalsOf(best: Lowest, searches: readonly Lowest[], within: number): re
   const found: Lowest[] = [];
   for (const search of searches) {
     const near = search.value - best.value <= within && search.stop.kind === "converged";
-    const known = [best, ...found].some((other) => alike(other.estimates, search.estimates));
+    const known = [best, ...found].some((other) => sameEnd(other, search, within));
     if (near && !known) found.push(search);
   }
   return found;
+}
+
+/** Ends with the same value are one optimum: the fitted values agree, along an edge at infinity the constants may not. */
+function sameEnd(a: Lowest, b: Lowest, within: number): boolean {
+  return Math.abs(a.value - b.value) <= 1e-6 * within || alike(a.estimates, b.estimates);
 }
 
 function alike(a: Float64Array, b: Float64Array): boolean {

@@ -88,3 +88,65 @@ export function refuseNoStart(group: ObservedGroup, ruleText: string): ModelErro
     { group: group.name, rule: ruleText },
   );
 }
+
+export function refuseNoCount(group: ObservedGroup, row: number, value: number): ModelError {
+  return new ModelError(
+    "not-a-count",
+    `Row ${row}${named(group)}: ${value} is not a count, which a Poisson or negative binomial spread needs. Give whole ` +
+      'numbers from 0, or choose { spread: "constant" } or { spread: "proportional" }.',
+    { group: group.name, row, value },
+  );
+}
+
+export function refuseAllCensored(group: ObservedGroup, state: string, side: "above" | "below"): ModelError {
+  return new ModelError(
+    "all-censored",
+    `Every value of ${state}${named(group)} is only known to lie ${side} its limit: nothing tells how far. At least some exact ` +
+      "values are needed; until then only a one-sided statement is possible.",
+    { group: group.name, state, side },
+  );
+}
+
+export function refuseInputGap(input: string, group: ObservedGroup, period: number): ModelError {
+  return new ModelError(
+    "input-missing-in-period",
+    `The input "${input}" is not recorded in period ${period}${named(group)}, which a step of the rule reads. Record it (0 where ` +
+      "nothing happened), or fit the part of the record that has it.",
+    { input, group: group.name, period },
+  );
+}
+
+export function refuseJumps(name: string, ruleText: string): ModelError {
+  return new ModelError(
+    "rule-jumps",
+    `"${ruleText}" jumps at ${name}(...), so its constants have no best value that a search could find: small changes of them change ` +
+      "nothing, and then a whole step. Fit the rule without the rounding; keep it for schedules and projections.",
+    { function: name, rule: ruleText },
+  );
+}
+
+export function refuseSpread(sd: number): ModelError {
+  return new ModelError(
+    "bad-spread",
+    `The standard deviation ${sd} of { spread: { sd } } is not a positive number. Give it in the unit of the record.`,
+    { sd },
+  );
+}
+
+export function refuseUnknownSpread(spread: unknown): ModelError {
+  return new ModelError(
+    "unknown-spread",
+    `There is no fit with the spread ${String(spread)}. Choose "constant", "proportional", "poisson", "negative-binomial" or ` +
+      "{ sd }; counts only with errors in the process or in the observation.",
+    { spread },
+  );
+}
+
+export function refuseFactor(errors: string): ModelError {
+  return new ModelError(
+    "factor-without-trajectory",
+    `A factor of the record is found from whole trajectories, not with errors: "${errors}". Use { errors: "observation" }, or ` +
+      "write the factor into the rule.",
+    { errors },
+  );
+}
