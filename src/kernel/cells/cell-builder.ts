@@ -7,6 +7,8 @@ import type ts from "typescript-cell";
 export function cellBuilder(library: typeof ts): ts.CreateProgram<ts.BuilderProgram> {
   return (...given) => {
     const builder = Reflect.apply(library.createAbstractBuilder, undefined, given) as ts.BuilderProgram;
+    // The converter looks at scopes and parents, which are there once the checker has bound the files.
+    builder.getProgram().getTypeChecker();
     return { ...builder, getAllDependencies: (file) => sourcesReachedFrom(builder.getProgram(), file) };
   };
 }

@@ -1,4 +1,6 @@
+import { existsSync } from "node:fs";
 import { createRequire } from "node:module";
+import { relative } from "node:path";
 import type { Converter, ConvertResult } from "tslab/dist/converter";
 import { type CellCompiler, type CompiledCell, type CompiledModule, cellCompiler } from "./cell-compiler.js";
 import { Interrupted } from "./cell-error.js";
@@ -7,7 +9,7 @@ import { ownPackages } from "./installation.js";
 import { installOwnModules, type Preloaded } from "./own-modules.js";
 import { modulePreloader } from "./preload-modules.js";
 import { redeclaredNames } from "./redeclared-names.js";
-import type { SourceRegister } from "./source-register.js";
+import type { Source, SourceRegister } from "./source-register.js";
 
 const load = createRequire(__filename);
 
@@ -22,7 +24,13 @@ export interface CellSession {
   readonly compiler: CellCompiler;
   /** Declarations of everything that cells so far have made. */
   readonly declarations: () => string;
-  readonly run: (text: string, name: string, label: string) => Promise<CellOutcome>;
+  /** `isStopped` is asked before the cell begins: it may have been interrupted while it was compiled. */
+  readonly run: (
+    text: string,
+    name: string,
+    label: string,
+    isStopped?: () => boolean,
+  ) => Promise<CellOutcome>;
   /** Ends the wait of the running cell. */
   readonly stop: () => void;
 }
@@ -57,15 +65,16 @@ export function cellSession(folder: string, sources: SourceRegister): CellSessio
     compiler,
     declarations: () => declarations,
     stop: () => executor.interrupt(),
-    run: async (text, name, label) => {
+    run: async (text, name, label, isStopped = () => false) => {
       outcome = { kind: "nothing" };
       try {
         const cell = compiler.compile(declarations, text);
         sources.add({ name, label, text, findPlace: cell.findPlace });
-        for (const { path, findPlace } of cell.modules) sources.add({ name: path, label: path, findPlace });
+        for (const module of cell.modules) sources.add(moduleSource(folder, module));
         const modules = changed.withDependents(cell.modules);
         await preload([cell.code, ...cell.modules.map(({ code }) => code)]);
         prepared = executable(cell, modules, name);
+        if (isStopped()) throw new Interrupted();
         const before = { ...executor.locals };
         if (await executor.execute("")) declarations = cell.declarations;
         else restore(executor.locals, before, cell);
@@ -75,6 +84,12 @@ export function cellSession(folder: string, sources: SourceRegister): CellSessio
       return outcome.kind === "failed" ? { kind: "failed", cause: stopCause(outcome.cause) } : outcome;
     },
   };
+}
+
+function moduleSource(folder: string, { path, findPlace }: CompiledModule): Source {
+  const written =
+    [".ts", ".tsx"].map((end) => path.replace(/\.js$/, end)).find((one) => existsSync(one)) ?? path;
+  return { name: path, label: relative(folder, written), file: written, findPlace };
 }
 
 /** The cell as the executor takes it, with its name for stack traces. */

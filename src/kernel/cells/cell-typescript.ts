@@ -124,7 +124,8 @@ function virtualTexts(folder: string): VirtualTexts {
     libraryFile,
     read: (path) => {
       if (path === globalsFile) {
-        return cellGlobals + (nodeTypes ? '\n/// <reference types="node" />\n' : smallNodeGlobals);
+        // A reference counts only before everything else.
+        return nodeTypes ? `/// <reference types="node" />\n${cellGlobals}` : cellGlobals + smallNodeGlobals;
       }
       if (path === libraryFile) return language;
       return isInLanguageLibrary(compilerPath, path) ? "" : undefined;

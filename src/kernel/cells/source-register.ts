@@ -6,8 +6,10 @@ export interface Source {
   readonly name: string;
   /** What a person calls it: "cell 3", "rates.ts". */
   readonly label: string;
-  /** Known for a cell; that of a file is read when it is needed. */
+  /** The text of a cell. */
   readonly text?: string;
+  /** The path of a file, whose text is read when it is needed. */
+  readonly file?: string;
   readonly findPlace: PlaceFinder | undefined;
 }
 

@@ -31,22 +31,30 @@ export function errorReport(
 }
 
 function refusedReport({ name, message, complaints }: CellError, text: string, label: string): ErrorReport {
-  const places = complaints.slice(0, shownPlaces).map((complaint) => complaintText(complaint, text, label));
+  const shown = complaints.slice(0, shownPlaces);
+  const places = shown.map((complaint, index) => complaintText(complaint, shown[index - 1], text, label));
   const more = complaints.length > shownPlaces ? [`and ${complaints.length - shownPlaces} more`] : [];
   return { ename: name, evalue: message, traceback: [heading(name, message), ...places, ...more] };
 }
 
-function complaintText({ file, start, end, text }: Complaint, cellText: string, label: string): string {
+/** What the heading says already is not said again, nor is a place shown twice for the parts of one message. */
+function complaintText(
+  { file, start, end, text }: Complaint,
+  before: Complaint | undefined,
+  cellText: string,
+  label: string,
+): string {
+  if (before?.start.line === start.line && before.start.column === start.column) return `  ${text}`;
   const width = start.line === end.line ? Math.max(1, end.column - start.column) : 1;
   const shown = placeText("in", file ?? label, file === undefined ? cellText : fileText(file), start, width);
-  return `${text}\n${shown}`;
+  return before === undefined ? shown : `${text}\n${shown}`;
 }
 
 function thrownReport(cause: unknown, sources: SourceRegister): ErrorReport {
   const { ename, evalue } = named(cause);
   const places = stackPlaces(cause, sources).slice(0, shownPlaces);
-  const traced = places.map(({ source: { name, label, text }, place }, index) =>
-    placeText(index === 0 ? "in" : "called from", label, text ?? fileText(name), place),
+  const traced = places.map(({ source: { label, text, file = "" }, place }, index) =>
+    placeText(index === 0 ? "in" : "called from", label, text ?? fileText(file), place),
   );
   return { ename, evalue, traceback: [heading(ename, evalue), ...traced, ...causeLines(cause)] };
 }

@@ -91,7 +91,7 @@ async function outcomeOf(kernel: KernelState, execution: Execution): Promise<Cel
     const session = kernel.session();
     const languages = hasString.test(code) ? await kernel.languages() : [];
     const refused = stringErrors(session.compiler.library, languages, code);
-    const outcome = refused ?? (await session.run(code, cellName(run.serial), label));
+    const outcome = refused ?? (await session.run(code, cellName(run.serial), label, () => run.stopped));
     if (outcome.kind === "value" && !run.silent) await show(outcome.value, execution);
     return outcome;
   } catch (cause) {
