@@ -14,6 +14,32 @@ export type {
   Tradeoff,
   TradeoffOptions,
 } from "../src/decision/index.js";
+export type {
+  Attractor,
+  AttractorOptions,
+  Basins,
+  BasinsOptions,
+  Bifurcations,
+  BifurcationsOptions,
+  ClosedForm,
+  ClosedFormOptions,
+  Cobweb,
+  CobwebOptions,
+  Cycles,
+  CyclesOptions,
+  Equilibria,
+  EquilibriaOptions,
+  ExactPath,
+  ExactPathOptions,
+  Exponent,
+  ExponentOptions,
+  HeldSetting,
+  Horizon,
+  HorizonOptions,
+  MatrixGrowth,
+  Path,
+  PathOptions,
+} from "../src/dynamics/index.js";
 export {
   type Estimate,
   estimates,
@@ -60,6 +86,20 @@ export { best, sensitivity, tradeoff } from "./commands/choices.js";
 export { compare } from "./commands/comparisons.js";
 export { correct, type DecisionsLog, decisionsLog, undo } from "./commands/corrections.js";
 export { nextReading, reaches, solveFor } from "./commands/decisions.js";
+export {
+  attractor,
+  basins,
+  bifurcations,
+  closedForm,
+  cobweb,
+  cycles,
+  equilibria,
+  exactPath,
+  exponent,
+  horizon,
+  matrixGrowth,
+  path,
+} from "./commands/dynamics.js";
 export { type Explanation, explain } from "./commands/explain.js";
 export { fit } from "./commands/fits.js";
 export { forecast, simulate } from "./commands/projections.js";
@@ -69,7 +109,13 @@ export {
   readRecord,
   writeRecord,
 } from "./commands/records.js";
-export { type RecurrenceOptions, type Rule, recurrence } from "./commands/rules.js";
+export {
+  type RecurrenceOptions,
+  type Rule,
+  type RuleCatalogue,
+  recurrence,
+  rules,
+} from "./commands/rules.js";
 export { show } from "./commands/show.js";
 export { frame, type RecordLike, sourceOf } from "./dataframe/index.js";
 export { type Figure, type FigureOptions, figure } from "./figures/index.js";

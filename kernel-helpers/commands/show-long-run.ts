@@ -1,0 +1,229 @@
+import type {
+  Attractor,
+  Basins,
+  Bifurcations,
+  Cobweb,
+  Cycles,
+  Equilibria,
+  Exponent,
+  Horizon,
+} from "../../src/dynamics/index.js";
+import type { Rule } from "../../src/rule/index.js";
+import { cobwebFigure, type Figure, figure, type Layer } from "../figures/index.js";
+import { type Column, type Table, table } from "../tables/index.js";
+
+const unitOf = (rule: Rule, name: string): string => rule.units[name] ?? "";
+const number = { kind: "number", digits: 6 } as const;
+const verdictColumns: readonly Column[] = [
+  { key: "size", label: "Size of the multiplier", ...number },
+  { key: "verdict", label: "Verdict", kind: "text" },
+  { key: "approach", label: "Gaps move", kind: "text" },
+  { key: "boundary", label: "Boundary", kind: "text" },
+];
+
+const searched = {
+  every: "None in the range searched can be missing.",
+  "many-starts": "Found from many starts; for a system this does not prove that there is no other.",
+  "cut-short": "The search was cut short; there may be more. Narrow the range.",
+} as const;
+
+/** Rest levels with their verdicts. */
+export function showEquilibria(found: Equilibria): readonly Table[] {
+  const { rule, points } = found;
+  const ranges = rule.states.map(
+    (state) => `${state} from ${found.within[state]![0]} to ${found.within[state]![1]}`,
+  );
+  return [
+    table({
+      title: points.length === 0 ? "No rest level in the range" : "Rest levels",
+      columns: [
+        ...rule.states.map(
+          (state): Column => ({ key: state, label: state, unit: unitOf(rule, state), ...number, digits: 8 }),
+        ),
+        ...verdictColumns,
+      ],
+      rows: points.map((point) => ({ ...point, ...point.at, size: point.multipliers[0]!.modulus })),
+      notes: [
+        ...points.map(({ sentence }) => sentence),
+        `Searched: ${ranges.join(", ")}. ${searched[found.search]}`,
+      ],
+    }),
+  ];
+}
+
+/** Cycles of one period with their verdicts. */
+export function showCycles(found: Cycles): readonly Table[] {
+  return [
+    table({
+      title: `Cycles of period ${found.period}: ${found.cycles.length}`,
+      columns: [{ key: "values", label: "Values in turn", kind: "text" }, ...verdictColumns],
+      rows: found.cycles.map((cycle) => ({
+        ...cycle,
+        values: cycle.points.map((x) => Number(x.toPrecision(7))).join(", "),
+        size: cycle.multiplier.modulus,
+      })),
+      notes: [`Searched from ${found.within[0]} to ${found.within[1]}. ${searched[found.search]}`],
+    }),
+  ];
+}
+
+/** Places at which what is stable changes. */
+export function showBifurcations(found: Bifurcations): readonly Table[] {
+  const ends = {
+    range: "The range was followed to its end.",
+    most: "As many places as asked for were found.",
+    "no-cycle": "Beyond the last place no stable cycle of period up to 128 was left to follow.",
+  } as const;
+  return [
+    table({
+      title: `Where the stable cycle changes as ${found.constant} varies`,
+      columns: [
+        { key: "at", label: found.constant, unit: unitOf(found.rule, found.constant), ...number, digits: 10 },
+        { key: "kind", label: "Kind", kind: "text" },
+        { key: "period", label: "Period left", kind: "integer" },
+      ],
+      rows: found.places.map((place) => ({
+        ...place,
+        kind: place.kind === "flip" ? "flip: the period doubles" : "fold: the cycle vanishes",
+      })),
+      notes: [ends[found.stop]],
+    }),
+  ];
+}
+
+/** The exponent, and its running mean. */
+export function showExponent(found: Exponent): readonly (Figure | Table)[] {
+  const size = found.periods / found.settling.length;
+  return [
+    table({
+      title: "Growth of small gaps",
+      columns: [
+        { key: "value", label: "Exponent", unit: "per period", ...number },
+        { key: "lower", label: `Interval ${100 * found.level}%, from`, ...number },
+        { key: "upper", label: "to", ...number },
+        { key: "verdict", label: "Verdict", kind: "text" },
+        { key: "periods", label: "Periods", kind: "integer" },
+      ],
+      rows: [{ ...found, lower: found.interval[0], upper: found.interval[1] }],
+      notes: [found.sentence],
+    }),
+    figure({
+      title: "How the exponent settled",
+      x: { title: "Periods measured" },
+      y: { title: "Mean so far", unit: "per period" },
+      layers: [
+        {
+          mark: "line",
+          name: "exponent",
+          x: Array.from(found.settling, (_, i) => (i + 1) * size),
+          y: found.settling,
+        },
+        { mark: "threshold", name: "no growth", y: 0 },
+      ],
+    }),
+  ];
+}
+
+/** How far ahead, in one line. */
+export function showHorizon(found: Horizon): readonly (Figure | Table)[] {
+  return [
+    table({
+      title: "Horizon of single values",
+      columns: [
+        { key: "periods", label: "Periods", ...number, digits: 3 },
+        { key: "lower", label: "From", ...number, digits: 3 },
+        { key: "upper", label: "to", ...number, digits: 3 },
+      ],
+      rows: [
+        { periods: open(found.periods), lower: open(found.interval[0]), upper: open(found.interval[1]) },
+      ],
+      notes: [found.sentence],
+    }),
+    ...showExponent(found.exponent),
+  ];
+}
+
+const open = (value: number): number | string => (Number.isFinite(value) ? value : "no end");
+
+/** The diagram of long-run values, the estimate marked with its interval. */
+export function showAttractor(found: Attractor): readonly Figure[] {
+  const { estimate, constant, state, perColumn } = found;
+  const marks: Layer[] =
+    estimate === undefined
+      ? []
+      : [
+          { mark: "vertical", name: "estimate", x: estimate.value },
+          { mark: "vertical", name: "interval, lower end", x: estimate.interval[0] },
+          { mark: "vertical", name: "interval, upper end", x: estimate.interval[1] },
+        ];
+  const x = Float64Array.from(found.values, (_, i) => found.at[Math.floor(i / perColumn)]!);
+  return [
+    figure({
+      title: `Long-run values of ${state}`,
+      x: { title: constant, unit: unitOf(found.rule, constant) },
+      y: { title: state, unit: unitOf(found.rule, state) },
+      layers: [
+        { mark: "points", name: `${state} in the long run`, x, y: found.values, small: true },
+        ...marks,
+      ],
+      summary: `${found.at.length} values of ${constant}, ${perColumn} long-run values at each.`,
+    }),
+  ];
+}
+
+/** The web, and the second iterate beside the rule. */
+export function showCobweb(found: Cobweb): readonly Figure[] {
+  const { rule, state } = found;
+  const axis = { title: state, unit: unitOf(rule, state) };
+  const path = Array.from({ length: (found.web.x.length + 1) / 2 }, (_, i) => found.web.x[2 * i]!);
+  return [
+    cobwebFigure({
+      title: "Next value against present value",
+      state: axis,
+      rule: { name: "the rule", present: found.present, next: found.next },
+      path,
+      equilibria: found.equilibria.map(({ at, verdict }) => ({
+        value: at[state]!,
+        stable: verdict === "undetermined" ? "undetermined" : verdict === "stable",
+      })),
+    }),
+    figure({
+      title: "Value two periods on against present value",
+      x: { ...axis, title: `${state}, present` },
+      y: { ...axis, title: `${state}, two periods on` },
+      layers: [
+        { mark: "line", name: "no change", x: found.present, y: found.present, dashed: true },
+        { mark: "line", name: "the rule twice", x: found.present, y: found.secondNext },
+      ],
+    }),
+  ];
+}
+
+/** Where starts end up. */
+export function showBasins(found: Basins): readonly Table[] {
+  const known = found.basins.some(({ probability }) => probability !== undefined);
+  return [
+    table({
+      title: "Where first values end up",
+      columns: [
+        { key: "where", label: "Long-run values", kind: "text" },
+        { key: "from", label: "First values", kind: "text" },
+        ...(known ? [{ key: "probability", label: "Probability", kind: "probability" } as const] : []),
+      ],
+      rows: found.basins.map(({ attractor, from, probability }) => ({
+        where:
+          attractor.length === 0
+            ? "without bound"
+            : attractor.map((x) => Number(x.toPrecision(6))).join(", "),
+        from: from
+          .map(([low, high]) => `${Number(low.toPrecision(8))} to ${Number(high.toPrecision(8))}`)
+          .join("; "),
+        probability,
+      })),
+      notes:
+        found.borders.length === 0
+          ? []
+          : [`Borders: ${found.borders.map((x) => Number(x.toPrecision(10))).join(", ")}.`],
+    }),
+  ];
+}

@@ -1,0 +1,76 @@
+import {
+  eventOrder,
+  type NamedRule,
+  type Rule,
+  ruleLanguage,
+  ruleTex,
+  ruleText,
+} from "../../src/rule/index.js";
+import { type Bundle, type Table, table } from "../tables/index.js";
+import { shownTogether } from "./shown-together.js";
+
+const number = { kind: "number", digits: 6 } as const;
+
+function namesTable(rule: Rule): Table {
+  const meanings = rule.named?.quantities ?? {};
+  return table({
+    title: ruleText(rule).split("\n").join("; "),
+    columns: [
+      { key: "name", label: "Name", kind: "text" },
+      { key: "role", label: "Role", kind: "text" },
+      { key: "unit", label: "Unit", kind: "text" },
+      ...(rule.named === undefined ? [] : [{ key: "meaning", label: "Meaning", kind: "text" } as const]),
+      { key: "lowest", label: "Lowest", ...number },
+      { key: "highest", label: "Highest", ...number },
+    ],
+    rows: ruleLanguage(rule).names.map(({ name, role, unit }) => ({
+      name,
+      role,
+      unit: unit === "" ? "none stated" : unit,
+      meaning: meanings[name]?.meaning ?? "worked out inside the period",
+      lowest: rule.bounds[name]?.[0] ?? "open",
+      highest: rule.bounds[name]?.[1] ?? "open",
+    })),
+    notes: [`Order of events: ${eventOrder(rule)}.`, ...rule.findings.map(({ message }) => message)],
+  });
+}
+
+const under = (when: string | undefined): string => (when === undefined ? "always" : when);
+const byState = (values: Readonly<Record<string, string>>): string =>
+  Object.entries(values)
+    .map(([state, text]) => `${state} = ${text}`)
+    .join(", ");
+
+function knownTable(named: NamedRule): Table {
+  const rests = named.equilibria.map(({ at, multiplier, when }) => ({
+    what: "rest level",
+    formula: byState(at),
+    slope: multiplier ?? "of the system",
+    when: under(when),
+  }));
+  const forms = named.closedForms.map(({ values, when }) => ({
+    what: "after t periods",
+    formula: byState(values),
+    slope: "does not apply",
+    when: under(when),
+  }));
+  const range = named.holds.length === 0 ? [] : [`It means what it says where ${named.holds.join("; ")}.`];
+  return table({
+    title: named.title,
+    columns: [
+      { key: "what", label: "Known", kind: "text" },
+      { key: "formula", label: "Formula", kind: "text" },
+      { key: "slope", label: "Slope there", kind: "text" },
+      { key: "when", label: "Where", kind: "text" },
+    ],
+    rows: [...rests, ...forms],
+    notes: [...range, named.remarks, `Source: ${named.source}.`],
+  });
+}
+
+/** A rule as a reader sees it: its lines, its names, what is known of it, and its TeX for a paper. */
+export async function showRule(rule: Rule): Promise<Bundle> {
+  const parts = rule.named === undefined ? [] : [knownTable(rule.named)];
+  const bundle = await shownTogether([namesTable(rule), ...parts]);
+  return { ...bundle, "text/latex": `$$\\begin{gathered}\n${ruleTex(rule)}\n\\end{gathered}$$` };
+}
