@@ -11,6 +11,18 @@ import { unitJump } from "./unit-jump.js";
 const checks = [neverChanges, belowZero, manyZeros, ceiling, unitJump, spike, oddChange, bulk] as const;
 
 /** Looks at one state of one series for what a careful analyst would see. Nothing is altered. */
-export function checkValues(series: CheckedSeries): void {
-  if (series.values.length > 1) for (const check of checks) check(series);
+export function checkValues(series: Omit<CheckedSeries, "logarithms">): void {
+  const { values, measured } = series;
+  if (values.length < 2) return;
+  const logarithms = measured === "level" ? logarithmsOf(values) : undefined;
+  for (const check of checks) check({ ...series, logarithms });
+}
+
+function logarithmsOf(values: Float64Array): Float64Array | undefined {
+  const logarithms = new Float64Array(values.length);
+  for (let i = 0; i < values.length; i++) {
+    if (!(values[i]! > 0)) return undefined;
+    logarithms[i] = Math.log(values[i]!);
+  }
+  return logarithms;
 }

@@ -6,6 +6,8 @@ export interface CheckedSeries {
   readonly group: ObservedGroup;
   readonly state: ObservedState;
   readonly values: Float64Array;
+  /** Natural logarithms of levels that are all positive. */
+  readonly logarithms: Float64Array | undefined;
   readonly measured: "level" | "flow";
   /** Name of the period column. */
   readonly period: string;

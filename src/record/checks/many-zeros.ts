@@ -6,9 +6,9 @@ const sporadic = 1 / 3;
 /** A flow with many zeros: whether a zero is no demand or a closed period cannot be told from it. */
 export function manyZeros(series: CheckedSeries): void {
   const { values, state, measured } = series;
+  if (measured !== "flow" || values.length < 6) return;
   const zeros = values.filter((value) => value === 0).length;
-  if (measured !== "flow" || values.length < 6 || zeros < sporadic * values.length || zeros === values.length)
-    return;
+  if (zeros < sporadic * values.length || zeros === values.length) return;
   const mean = values.reduce((a, b) => a + b, 0) / values.length;
   const variance = values.reduce((sum, value) => sum + (value - mean) ** 2, 0) / (values.length - 1);
   const message =

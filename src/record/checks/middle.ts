@@ -14,20 +14,25 @@ function smallest(list: Float64Array, place: number): number {
   let from = 0;
   let to = list.length - 1;
   while (from < to) {
-    const pivot = list[(from + to) >> 1]!;
-    let i = from;
-    let j = to;
-    while (i <= j) {
-      while (list[i]! < pivot) i++;
-      while (list[j]! > pivot) j--;
-      if (i > j) break;
-      const held = list[i]!;
-      list[i++] = list[j]!;
-      list[j--] = held;
-    }
-    if (place <= j) to = j;
-    else if (place >= i) from = i;
+    const [low, high] = parted(list, from, to);
+    if (place <= high) to = high;
+    else if (place >= low) from = low;
     else break;
   }
   return list[place]!;
+}
+
+/** Parts a stretch at the value in its middle: up to the second place none is larger, from the first on none smaller. */
+function parted(list: Float64Array, from: number, to: number): readonly [number, number] {
+  const pivot = list[(from + to) >> 1]!;
+  let i = from;
+  let j = to;
+  for (;;) {
+    while (list[i]! < pivot) i++;
+    while (list[j]! > pivot) j--;
+    if (i > j) return [i, j];
+    const held = list[i]!;
+    list[i++] = list[j]!;
+    list[j--] = held;
+  }
 }

@@ -3,10 +3,9 @@ import { standsOut } from "./stands-out.js";
 
 /** A level far from both of its neighbours. It is told, never smoothed away. */
 export function spike(series: CheckedSeries): void {
-  const { values, measured } = series;
+  const { values, logarithms, measured } = series;
   if (measured !== "level") return;
-  const scaled = values.every((value) => value > 0) ? values.map(Math.log) : values;
-  for (const i of standsOut(scaled)) {
+  for (const i of standsOut(logarithms ?? values)) {
     const message = `${periodOf(series, i)}: ${values[i]} lies far from its neighbours ${values[i - 1]} and ${values[i + 1]}.`;
     noteValue(series, i, "spike", message);
   }

@@ -24,8 +24,6 @@ export interface Calendar {
   readonly ofDate: ((moment: Moment) => number) | undefined;
   /** Number of the period named by a year and a number within it, or undefined when there is none. */
   readonly ofYearAndNumber: ((year: number, number: number) => number | undefined) | undefined;
-  /** The numbers a period column may hold, counted in `step.of`. */
-  readonly ofNumber: (value: number) => number;
 }
 
 const unitLengths: Readonly<Record<string, number>> = {
@@ -58,7 +56,6 @@ export function everyUnit(step: StepLength, name?: CalendarName): Calendar {
           ? (moment) => Math.floor(monthNumber(moment) / months) / step.every
           : undefined,
     ofYearAndNumber: months === undefined ? undefined : numbered(12 / months, step.every),
-    ofNumber: (value) => value / step.every,
   };
 }
 
@@ -75,7 +72,6 @@ const isoWeeks: Calendar = {
     const monday = mondayOf(year, week);
     return monday === undefined ? undefined : monday / (7 * dayLength);
   },
-  ofNumber: (value) => value,
 };
 
 /** Twelve trading periods a year of four, four and five weeks; a date alone does not say when the year begins. */
@@ -84,7 +80,6 @@ const fourFourFive: Calendar = {
   step: { every: 1, of: "period" },
   ofDate: undefined,
   ofYearAndNumber: numbered(12, 1),
-  ofNumber: (value) => value,
 };
 
 const named: Readonly<Record<CalendarName, Calendar>> = {

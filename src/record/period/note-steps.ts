@@ -7,16 +7,31 @@ import { stepText } from "./whole-steps.js";
 export function noteSteps(groups: readonly ObservedGroup[], axis: PeriodAxis, log: FindingLog): void {
   const counts = new Map<number, number>();
   for (const group of groups) {
-    for (let i = 1; i < group.index.length; i++) {
-      const steps = group.index[i]! - group.index[i - 1]!;
-      counts.set(steps, (counts.get(steps) ?? 0) + 1);
-      if (steps > 1) noteGap(group, i, steps, axis, log);
-    }
+    noteGaps(group, counts, axis, log);
     if (group.index.length === 1) noteSingle(group, axis, log);
   }
   const lengths = [...counts.keys()].sort((a, b) => a - b);
   if (lengths.length > 0 && lengths[0]! > 1) noteShortStep(lengths[0]!, axis, log);
   else if (lengths.length > 1) noteMixed(lengths, counts, axis, log);
+}
+
+/** Counts the steps of a series by their length, and notes each that is longer than one. */
+function noteGaps(
+  group: ObservedGroup,
+  counts: Map<number, number>,
+  axis: PeriodAxis,
+  log: FindingLog,
+): void {
+  let single = 0;
+  for (let i = 1; i < group.index.length; i++) {
+    const steps = group.index[i]! - group.index[i - 1]!;
+    if (steps === 1) single++;
+    else {
+      counts.set(steps, (counts.get(steps) ?? 0) + 1);
+      noteGap(group, i, steps, axis, log);
+    }
+  }
+  if (single > 0) counts.set(1, (counts.get(1) ?? 0) + single);
 }
 
 function written(group: ObservedGroup, i: number): string {

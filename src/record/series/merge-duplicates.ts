@@ -33,8 +33,8 @@ export function mergeDuplicates(
   merging: Merging,
   log: FindingLog,
 ): MergedRows {
+  if (!hasDoubles(rows, axis.position)) return unmerged(rows);
   const starts = startsOfPeriods(rows, axis.position);
-  if (starts.length === rows.length) return unmerged(rows);
   const runs = Array.from(starts, (start, i) => rows.subarray(start, starts[i + 1] ?? rows.length));
   const doubled = runs.filter((run) => run.length > 1);
   if (merging === "refuse") throw refusal(doubled, group, columns, axis);
@@ -50,14 +50,19 @@ export function mergeDuplicates(
   };
 }
 
+/** Positions are in steps: closer than a millionth of a step is the same period. */
+const same = 1e-6;
+
+function hasDoubles(rows: Int32Array, position: Float64Array): boolean {
+  for (let i = 1; i < rows.length; i++)
+    if (position[rows[i]!]! - position[rows[i - 1]!]! <= same) return true;
+  return false;
+}
+
 function startsOfPeriods(rows: Int32Array, position: Float64Array): Int32Array {
-  const starts = new Int32Array(rows.length);
-  let count = 0;
-  for (let i = 0; i < rows.length; i++) {
-    // Positions are in steps: closer than a millionth of a step is the same period.
-    if (i === 0 || position[rows[i]!]! - position[rows[i - 1]!]! > 1e-6) starts[count++] = i;
-  }
-  return starts.subarray(0, count);
+  return Int32Array.from(rows.keys()).filter(
+    (i) => i === 0 || position[rows[i]!]! - position[rows[i - 1]!]! > same,
+  );
 }
 
 function unmerged(rows: Int32Array): MergedRows {

@@ -9,15 +9,13 @@ export function presentRows(
   axis: PeriodAxis,
   log: FindingLog,
 ): Int32Array {
-  const empty = (row: number): number => columns.values.findIndex((values) => Number.isNaN(values[row]!));
-  let missing = 0;
-  for (const row of rows) {
-    const state = empty(row);
-    if (state < 0) continue;
-    missing++;
-    noteMissing(row, columns.states[state]!.column, axis, log);
-  }
-  return missing === 0 ? rows : rows.filter((row) => empty(row) < 0);
+  const missing = new Map<number, number>();
+  columns.values.forEach((values, state) => {
+    for (const row of rows) if (Number.isNaN(values[row]!) && !missing.has(row)) missing.set(row, state);
+  });
+  if (missing.size === 0) return rows;
+  for (const [row, state] of missing) noteMissing(row, columns.states[state]!.column, axis, log);
+  return rows.filter((row) => !missing.has(row));
 }
 
 function noteMissing(row: number, column: string, axis: PeriodAxis, log: FindingLog): void {
