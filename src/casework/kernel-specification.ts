@@ -3,6 +3,7 @@ import { homedir } from "node:os";
 import { join } from "node:path";
 import { installationFolder } from "../kernel/index.js";
 import type { KernelCommand } from "./client/kernel-process.js";
+import { logoPng, logoSvg } from "./logo.js";
 import { foreignSpecification } from "./refusals.js";
 
 const kernelName = "periodwise";
@@ -22,6 +23,9 @@ export function dataFolder(prefix: string | undefined, env: NodeJS.ProcessEnv, p
   return join(env["XDG_DATA_HOME"] || join(home, ".local", "share"), "jupyter");
 }
 
+/** The sizes that front ends look for. */
+const logoSizes = [32, 64];
+
 interface Specification {
   readonly metadata?: Readonly<Record<string, unknown>>;
 }
@@ -39,9 +43,11 @@ export function installSpecification(data: string, command: KernelCommand): stri
     display_name: "Periodwise (TypeScript)",
     language: "typescript",
     interrupt_mode: "message",
-    metadata: { [marker]: { version } },
+    metadata: { [marker]: { version, node: process.version } },
   };
   writeFileSync(join(folder, "kernel.json"), `${JSON.stringify(specification, undefined, 2)}\n`);
+  writeFileSync(join(folder, "logo-svg.svg"), logoSvg);
+  for (const size of logoSizes) writeFileSync(join(folder, `logo-${size}x${size}.png`), logoPng(size));
   return folder;
 }
 
