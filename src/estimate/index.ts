@@ -1,9 +1,11 @@
+export { type Bootstrap, type BootstrapOptions, type BootstrapRow, bootstrap } from "./bootstrap.js";
 export type { Criteria } from "./criteria.js";
 export type { Estimate } from "./estimate-of.js";
 export { type Fit, fit } from "./fit.js";
 export type { ErrorKind, FitOptions, Spread } from "./fit-options.js";
 export type { FitPoint } from "./fit-points.js";
 export type { FitRows } from "./fit-rows.js";
+export { type GridIntervalOptions, gridInterval } from "./grid-interval.js";
 export type { GroupFit } from "./group-fit.js";
 export type { Interval } from "./interval.js";
 export { normalEquations } from "./normal-equations.js";

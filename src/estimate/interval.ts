@@ -1,6 +1,6 @@
 /** Limits of an unknown. A limit that the record does not give is undefined, and the reason is in `note`. */
 export interface Interval {
-  readonly kind: "profile" | "wald";
+  readonly kind: "profile" | "wald" | "bootstrap" | "grid";
   readonly level: number;
   readonly lower: number | undefined;
   readonly upper: number | undefined;

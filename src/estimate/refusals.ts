@@ -150,3 +150,19 @@ export function refuseFactor(errors: string): ModelError {
     { errors },
   );
 }
+
+export function refuseResampling(): ModelError {
+  return new ModelError(
+    "not-by-least-squares",
+    "Records are simulated anew from fits by least squares of each group on its own. This fit was made by another likelihood, or of " +
+      "groups together: read its profiles.",
+  );
+}
+
+export function refuseFewDraws(draws: number): ModelError {
+  return new ModelError(
+    "too-few-draws",
+    `${draws} draws cannot show the ends of an interval. Give a whole number of at least 20, better 999.`,
+    { draws },
+  );
+}
