@@ -40,7 +40,7 @@ export interface ChangeFigureOptions {
 export function changeFigure(options: ChangeFigureOptions): Figure {
   const { title, value, change, pairs, rules = [], equilibria = [], still = 0, notes = [] } = options;
   const layers: Layer[] = [
-    { mark: "line", name: "no change", x: reach(options), y: [still, still], style: 5, dashed: true },
+    { mark: "line", name: "no change", x: reach(options), y: [still, still], style: 4, dashed: true },
     ...rules.map((rule, turn): Layer => ({ mark: "line", ...rule, style: ruleStyle(turn) })),
     ...pairs.map((pair): Layer => {
       const look = pair.overGap ? "open" : "plain";

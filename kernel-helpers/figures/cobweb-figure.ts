@@ -33,7 +33,7 @@ export function cobwebFigure(options: CobwebFigureOptions): Figure {
     x: { ...state, title: `${state.title}, present` },
     y: { ...state, title: `${state.title}, next` },
     layers: [
-      { mark: "line", name: "next = present", x: [first, last], y: [first, last], style: 5, dashed: true },
+      { mark: "line", name: "next = present", x: [first, last], y: [first, last], style: 4, dashed: true },
       { mark: "line", name: rule.name, x: rule.present, y: rule.next, style: 0 },
       { mark: "line", name: `path over ${path.length - 1} periods`, ...steps(path), style: 1 },
       ...equilibriumLayers(equilibria, still),

@@ -13,7 +13,7 @@ export function equilibriumLayers(
   const kinds = [
     { name: "stable equilibrium", stable: true, look: "plain", style: 0 },
     { name: "unstable equilibrium", stable: false, look: "open", style: 0 },
-    { name: "equilibrium, stability undetermined", stable: "undetermined", look: "open", style: 4 },
+    { name: "equilibrium, stability undetermined", stable: "undetermined", look: "open", style: 5 },
   ] as const;
   return kinds.flatMap(({ name, stable, look, style }): Layer[] => {
     const places = [...equilibria.keys()].filter((i) => equilibria[i]?.stable === stable);

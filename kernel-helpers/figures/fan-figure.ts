@@ -65,7 +65,7 @@ function fanLayers({ recorded, central, bands, recordEnd, horizon }: ProjectedSe
     }),
     { mark: "line", ...central, style: 0 },
     { mark: "points", ...recorded, style: recordedStyle },
-    { mark: "vertical", name: "record ends", x: recordEnd, style: 5 },
-    ...(horizon === undefined ? [] : [{ mark: "vertical", name: "horizon", x: horizon, style: 4 } as const]),
+    { mark: "vertical", name: "record ends", x: recordEnd, style: 4 },
+    ...(horizon === undefined ? [] : [{ mark: "vertical", name: "horizon", x: horizon, style: 5 } as const]),
   ];
 }

@@ -29,7 +29,7 @@ export function framedMultiples(
     y: [row + 0.06, row + 0.06],
   }));
   const layers: Layer[] = [
-    { mark: "line", name: "frame", ...together(floors), style: 5, inLegend: false, thin: true },
+    { mark: "line", name: "frame", ...together(floors), style: 4, inLegend: false, thin: true },
     ...(fitted.length > 0 ? [{ mark: "line", name: "fitted", ...together(fitted), style: 0 } as const] : []),
     { mark: "points", name: "recorded", ...together(recorded), style: recordedStyle, small: true },
     ...placed.map(

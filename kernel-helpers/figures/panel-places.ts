@@ -74,7 +74,7 @@ function labelWidth(data: readonly PlotTrace[], at: number): number {
     .filter((trace) => trace["yaxis"] === axisName("y", at))
     .flatMap((trace) => trace["y"] as unknown[]);
   const names = values.filter((value) => typeof value === "string").flatMap((name) => name.split("<br>"));
-  if (names.length > 0) return Math.min(190, Math.max(...names.map((name) => name.length)) * letter + 16);
+  if (names.length > 0) return Math.min(190, Math.max(...names.map(shownLength)) * letter + 16);
   const sizes = values.filter((value) => typeof value === "number").map(Math.abs);
   const greatest = sizes.reduce((most, size) => Math.max(most, size), 0);
   return greatest >= 1e5 || (greatest > 0 && greatest < 0.01) ? 64 : 46;
@@ -82,10 +82,18 @@ function labelWidth(data: readonly PlotTrace[], at: number): number {
 
 /** Height of a legend that stands above the panels and breaks into rows of equal columns. */
 function legendHeight(data: readonly PlotTrace[], width: number): number {
-  const names = data.filter((trace) => trace["showlegend"]).map((trace) => String(trace["name"]));
+  const names = data
+    .filter((trace) => trace["showlegend"])
+    .map((trace) => String(trace["name"]).split("<br>"));
   if (names.length < 2) return 0;
-  const widest = Math.max(...names.map((name) => name.length)) * letter + 48;
-  const total = names.reduce((sum, name) => sum + name.length * letter + 48, 0);
-  const rows = total <= width ? 1 : Math.ceil(names.length / Math.max(1, Math.floor(width / widest)));
-  return rows * 20 + 8;
+  const sizes = names.map((lines) => Math.max(...lines.map(shownLength)) * letter + 48);
+  const total = sizes.reduce((sum, size) => sum + size, 0);
+  const rows =
+    total <= width ? 1 : Math.ceil(names.length / Math.max(1, Math.floor(width / Math.max(...sizes))));
+  return rows * 20 * Math.max(...names.map((lines) => lines.length)) + 8;
+}
+
+/** Letters of a label, its numbered signs counted as one. */
+function shownLength(label: string): number {
+  return label.replace(/&#\d+;/g, "?").length;
 }

@@ -55,7 +55,7 @@ function profileLayers(profile: DrawnProfile, cut: number, level: string): Layer
   return [
     { mark: "line", name: "profile", x: held, y: worsening, style: 0 },
     { mark: "threshold", name: `cut-off ${level}`, y: cut, style: 1 },
-    { mark: "vertical", name: "estimate", x: estimate, style: 5 },
+    { mark: "vertical", name: "estimate", x: estimate, style: 4 },
     ...ends.map((x): Layer => ({ mark: "vertical", name: "end of interval", x, style: 3, inLegend: false })),
     ...(lower === undefined ? [noLimit(first, cut, "left")] : []),
     ...(upper === undefined ? [noLimit(last, cut, "right")] : []),

@@ -64,7 +64,7 @@ function copyButton(table: Table): string {
 const box = ".pw-table.pw-table";
 const tableStyle: string = `<style>
 ${box}{margin:.8em 0 1em;color:${look.ink};font-family:${typeface};font-size:14px;line-height:1.4;max-width:100%}
-${box} .pw-scroll{overflow-x:auto;max-width:100%}
+${box} .pw-scroll{overflow-x:auto;max-width:100%;position:relative}
 ${box} table{border-collapse:collapse;border:0;border-top:3px solid ${look.accent};background:${look.paper};margin:0;font-size:14px;width:auto;table-layout:auto}
 ${box} .pw-title{font-weight:600;font-size:15px;margin:0 0 .35em;overflow-wrap:anywhere}
 ${box} th,${box} td{border:0;border-bottom:1px solid ${look.line};padding:.32em .8em;vertical-align:baseline;max-width:min(28em,60vw);overflow-wrap:break-word;background:none;color:${look.ink};white-space:normal}
