@@ -16,7 +16,7 @@ function figuresOf(run: Simulation): Figure[] {
       title: `Simulation of ${run.rule.text}`,
       panels: run.groups.map((group) => ({
         title: group.scenario,
-        x: { title: "Period" },
+        x: { title: run.options.period },
         y: { title: name, unit: group.states[s]!.unit },
         layers: layersOf(run, group, s),
       })),
@@ -45,7 +45,7 @@ function tableOf(run: Simulation): Table {
   const columns: Column[] = [
     ...(run.groups.length > 1 ? [{ key: "scenario", label: "Scenario", kind: "text" } as const] : []),
     ...(run.rule.states.length > 1 ? [{ key: "state", label: "State", kind: "text" } as const] : []),
-    { key: "period", label: "Period", kind: "integer" },
+    { key: "period", label: run.options.period, kind: "integer" },
     { key: "central", label: "Without random change", ...number },
   ];
   if (random)
@@ -67,10 +67,10 @@ function rowsOf(run: Simulation, level: number): Readonly<Record<string, unknown
   return run.groups.flatMap((group) =>
     group.states.flatMap((state) => {
       const band = state.bands.find((each) => each.level === level);
-      return group.index.map((period, t) => ({
+      return group.index.map((_, t) => ({
         scenario: group.scenario,
         state: state.state,
-        period,
+        period: group.time[t],
         central: state.central[t],
         median: state.median[t],
         lower: band?.lower[t],

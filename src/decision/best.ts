@@ -6,7 +6,7 @@ import { amount, levelWords, plain, rounded } from "./amount.js";
 import { findPeak } from "./find-peak.js";
 import { isRisk, type Measure, measuredWords, measureWords } from "./measure.js";
 import { type MeasureReader, measureReader } from "./read-measure.js";
-import { recordWords } from "./record-words.js";
+import { conditionWords } from "./record-words.js";
 import { refuseNoEffect, refuseNoObjective, refuseRiskObjective } from "./refusals.js";
 import { type Setting, settingOf } from "./set-value.js";
 import { drawnGrounds } from "./setting-margin.js";
@@ -155,10 +155,7 @@ function bestSentence(
   const end = atEnd
     ? `; that is an end of the range ${plain(between[0], 4)} to ${plain(between[1], 4)}, so a wider range may hold a better one`
     : "";
-  const hold =
-    standing.fit === undefined
-      ? "the rule and its constants hold"
-      : `it goes on as in ${recordWords(standing.fit)}`;
+  const hold = conditionWords(standing.rule, standing.fit);
   const best = measuredWords(measure, answer.achieved, 0, standing);
   return `${answer.measure} is ${sign > 0 ? "largest" : "smallest"}, ${best}, with ${setting} at ${amount(rounded(value, spread), unit)}${margin}, and ${flat}${end}, provided ${hold}.`;
 }

@@ -82,9 +82,23 @@ export function plural(unit: string, count: number): string {
   return count === 1 || unit.endsWith("s") ? unit : `${unit}s`;
 }
 
+/** A measure with its value, as the main clause of a sentence: "owed falls to 0 EUR at month 120". */
+export function measuredClause(measure: Measure, value: number, error: number, units: MeasureUnits): string {
+  const { kind, name } = measureOf(measure);
+  const said = measuredWords(measure, value, error, units);
+  if (kind === "time")
+    return `${reachWords(name, measure as Extract<Measure, { time: string }>, units)} at ${said}`;
+  return `${measureWords(measure, units)} is ${said}`;
+}
+
+/** The same at the beginning of a sentence: names keep their first letter, words get a capital. */
+export function openingClause(measure: Measure, value: number, error: number, units: MeasureUnits): string {
+  return measuredClause(measure, value, error, units).replace(/^the /, "The ");
+}
+
 /** A measure's value as a sentence writes it. */
 export function measuredWords(measure: Measure, value: number, error: number, units: MeasureUnits): string {
-  if (isRisk(measure)) return percent(value, error);
+  if (isRisk(measure)) return value === 0 ? "none in the draws made" : percent(value, error);
   const { kind, name } = measureOf(measure);
   if (kind === "time") return `${units.periodUnit} ${plain(value, 5)}`;
   return amount(plain(value, 5), units.unitOf(name));

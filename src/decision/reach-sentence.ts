@@ -2,7 +2,7 @@ import type { Forecast, Simulation } from "../projection/index.js";
 import type { AcrossUnits } from "./across-units.js";
 import { amount, levelWords, plain, rounded, shareOfDraws } from "./amount.js";
 import type { GroupReach, ReachQuestion } from "./reach.js";
-import { groupWords, recordWords } from "./record-words.js";
+import { conditionWords, groupWords } from "./record-words.js";
 
 type Answer = Omit<GroupReach, "sentence">;
 type Ahead = Forecast | Simulation;
@@ -12,9 +12,9 @@ export function groupSentence(ahead: Ahead, answer: Answer, question: ReachQuest
   const body =
     answer.time === undefined || answer.firstPeriod === undefined
       ? notReached(ahead, answer, question)
-      : `${subject(ahead, answer, question)} reaches ${target(question)} ${when(answer, question)}; the first recorded ` +
-        `${question.periodUnit} at or past it is ${plain(answer.firstPeriod, 6)}${neverWords(answer, question)}`;
-  return `${body}, provided ${condition(ahead)}. ${marginWords(question)}`;
+      : `${subject(ahead, answer, question)} reaches ${target(question)} ${when(answer, question)}` +
+        `${firstWords(answer, question)}${neverWords(answer, question)}`;
+  return `${body}, provided ${condition(ahead)}.${marginWords(question, answer)}`;
 }
 
 /** One sentence for all groups: the first and the last to get there, and when all are there. */
@@ -42,7 +42,7 @@ export function reachSentence(
     missing.length > 0
       ? `; ${missing.map(who).join(" and ")} ${missing.length === 1 ? "does" : "do"} not get there by ${question.periodUnit} ${plain(missing[0]!.horizon, 6)}`
       : `; the first recorded ${question.periodUnit} at which all ${groups.length} are at or past it is ${plain(all, 6)}`;
-  return `${span}${rest}${newUnit(across, question)}, provided ${condition(ahead)}. ${marginWords(question)}`;
+  return `${span}${rest}${newUnit(across, question)}, provided ${condition(ahead)}.${marginWords(question, first)}`;
 }
 
 function byScenario(ahead: Ahead, groups: readonly GroupReach[], question: ReachQuestion): string {
@@ -51,10 +51,10 @@ function byScenario(ahead: Ahead, groups: readonly GroupReach[], question: Reach
     const said =
       group.time === undefined
         ? `not by ${question.periodUnit} ${plain(group.horizon, 6)}`
-        : `${when(group, question, true)}, first recorded ${question.periodUnit} ${plain(group.firstPeriod!, 6)}`;
+        : `${when(group, question, true)}${firstWords(group, question)}`;
     return `under "${group.scenario}"${who} ${said}`;
   });
-  return `${question.state} reaches ${target(question)} ${each.join("; ")}, provided ${condition(ahead)}. ${marginWords(question)}`;
+  return `${question.state} reaches ${target(question)} ${each.join("; ")}, provided ${condition(ahead)}.${marginWords(question, groups[0]!)}`;
 }
 
 function notReached(ahead: Ahead, answer: Answer, question: ReachQuestion): string {
@@ -99,6 +99,12 @@ function when(answer: Answer, question: ReachQuestion, short = false): string {
   return `${at} (${name}${rounded(lower, spread)} to ${rounded(upper, spread)})`;
 }
 
+/** The first recorded period, where the time lies between two. */
+function firstWords({ time, firstPeriod }: Answer, { periodUnit }: ReachQuestion): string {
+  if (firstPeriod === undefined || time === firstPeriod) return "";
+  return `; the first recorded ${periodUnit} at or past it is ${plain(firstPeriod, 6)}`;
+}
+
 function neverWords(answer: Answer, { periodUnit }: ReachQuestion): string {
   if (answer.never === 0) return "";
   const share = shareOfDraws(answer.never, answer.neverError, answer.draws);
@@ -113,15 +119,15 @@ function newUnit(across: AcrossUnits | undefined, { level, periodUnit }: ReachQu
 }
 
 function condition(ahead: Ahead): string {
-  if (ahead.kind === "simulation") return "the rule and its constants hold";
-  return `it goes on as in ${recordWords(ahead.fit)}`;
+  return conditionWords(ahead.kind === "simulation" ? ahead.rule : ahead.fit.rule, fitOf(ahead));
 }
 
-function marginWords({ margin }: ReachQuestion): string {
+function marginWords({ margin }: ReachQuestion, { draws }: Answer): string {
+  if (draws === 1) return "";
   if (margin === "constants")
-    return "The margin is that of the fitted constants, not of a further reading's error.";
-  if (margin === "random change") return "The margin is that of the random change, at the given constants.";
-  return "The margin is that of the fitted constants and of chance from period to period.";
+    return " The margin is that of the fitted constants, not of a further reading's error.";
+  if (margin === "random change") return " The margin is that of the random change, at the given constants.";
+  return " The margin is that of the fitted constants and of chance from period to period.";
 }
 
 function fitOf(ahead: Ahead): Forecast["fit"] | undefined {

@@ -48,7 +48,7 @@ function questionOf(ahead: Forecast | Simulation, rule: Rule, options: ReachOpti
   if (!rule.states.includes(state)) throw refuseStateUnknown(state, rule.states);
   if (!Number.isFinite(value)) throw refuseTarget(value);
   if (!(level > 0 && level < 1)) throw refuseLevel(level);
-  const period = ahead.kind === "forecast" ? ahead.fit.observations.period.unit : "period";
+  const period = ahead.kind === "forecast" ? ahead.fit.observations.period.unit : ahead.options.period;
   return {
     state,
     unit: ahead.groups[0]!.states.find((each) => each.state === state)!.unit,

@@ -23,9 +23,7 @@ export function measureReader(standing: Standing, measure: Measure): MeasureRead
   }
   const column = columnReader(standing, name);
   if ("time" in measure) return timeReader(standing, measure, column);
-  const ahead = ground.periods - present;
-  const [first, last] = windowOf(measure, ahead);
-  if (!(first >= 1 && last <= ahead && first <= last)) throw refuseMeasureWindow(first, last, ahead);
+  const [first, last] = windowOf(measure, ground.periods - present);
   return (at) => {
     const values = column(at).slice(present + first, present + last + 1);
     return summaries[kind as keyof typeof summaries](values);
@@ -41,9 +39,11 @@ const summaries = {
   highest: (values: readonly number[]): number => Math.max(...values),
 };
 
-function windowOf(measure: Measure, ahead: number): readonly [number, number] {
-  if ("level" in measure) return [measure.at, measure.at];
-  const { from = 1, to = ahead } = measure as { readonly from?: number; readonly to?: number };
+/** First and last period ahead of a measure's window, refused where the projection does not have them. */
+export function windowOf(measure: Measure, ahead: number): readonly [number, number] {
+  const window = measure as { readonly from?: number; readonly to?: number };
+  const [from, to] = "level" in measure ? [measure.at, measure.at] : [window.from ?? 1, window.to ?? ahead];
+  if (!(from >= 1 && to <= ahead && from <= to)) throw refuseMeasureWindow(from, to, ahead);
   return [from, to];
 }
 

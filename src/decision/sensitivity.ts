@@ -2,7 +2,7 @@ import type { Fit } from "../estimate/index.js";
 import type { Ground } from "../projection/index.js";
 import type { Rule } from "../rule/index.js";
 import { percent, plain } from "./amount.js";
-import { isRisk, type Measure, measuredWords, measureWords } from "./measure.js";
+import { isRisk, type Measure, measuredWords, measureWords, openingClause } from "./measure.js";
 import { measureReader } from "./read-measure.js";
 import { refuseRiskObjective } from "./refusals.js";
 import { settingOf } from "./set-value.js";
@@ -67,7 +67,7 @@ export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): S
     unit,
     answer,
     rows: Object.freeze(rows),
-    sentence: sentenceOf(options.answer, measure, answer, rows, standing),
+    sentence: sentenceOf(options.answer, answer, rows, standing),
   });
 }
 
@@ -110,14 +110,13 @@ function effect({ tenthLower, tenthUpper }: SensitivityRow): number {
 
 function sentenceOf(
   asked: Measure,
-  measure: string,
   answer: number,
   rows: readonly SensitivityRow[],
   standing: Standing,
 ): string {
-  const said = measuredWords(asked, answer, 0, standing);
+  const said = openingClause(asked, answer, 0, standing);
   const [first] = rows;
-  if (first === undefined) return `${measure} is ${said}; nothing was moved.`;
+  if (first === undefined) return `${said}; nothing was moved.`;
   const change = ([lower, upper]: readonly [number, number]): string =>
     `${measuredWords(asked, lower, 0, standing)} and ${measuredWords(asked, upper, 0, standing)}`;
   const elastic = Number.isFinite(first.elasticity)
@@ -131,5 +130,5 @@ function sentenceOf(
     loudest === undefined
       ? ""
       : ` What the record leaves open matters most through ${loudest.name} (${plain(loudest.value, 4)}, standard error ${plain(loudest.standardError!, 2)}): one standard error either way gives ${change([loudest.errorLower!, loudest.errorUpper!])}.`;
-  return `${measure} is ${said}; it hangs most on ${first.name}: ten per cent lower and higher give ${change([first.tenthLower, first.tenthUpper])}${elastic}.${uncertain}`;
+  return `${said}; it hangs most on ${first.name}: ten per cent lower and higher give ${change([first.tenthLower, first.tenthUpper])}${elastic}.${uncertain}`;
 }

@@ -2,7 +2,7 @@ import type { Fit } from "../estimate/index.js";
 import type { Rule } from "../rule/index.js";
 import { isRisk, type Measure, measureWords } from "./measure.js";
 import { measureReader } from "./read-measure.js";
-import { type Risk, riskReader } from "./read-risk.js";
+import { type Estimated, riskReader } from "./read-risk.js";
 import { refuseBounds, refuseNoEffect, refuseNoRange, refuseNoTarget } from "./refusals.js";
 import { type Setting, settingOf } from "./set-value.js";
 import { settingMargin } from "./setting-margin.js";
@@ -39,7 +39,12 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
   const tolerance = options.multiple === undefined ? 0 : 0.01 * options.multiple;
   const excess = (value: number): number => sidedExcess(until, reader(value).value - aim);
   const [from, to] = setting.between ?? rangeOf(found);
-  const roots = solveWithin(excess, from, to, { tolerance, edge: until.is === undefined });
+  const roots = solveWithin(excess, from, to, {
+    tolerance,
+    edge: until.is === undefined,
+    // A risk takes a whole run at every place.
+    ...(isRisk(until) && { looks: 12 }),
+  });
   if (roots.flat) throw refuseNoEffect(unknown, measureWords(until, standing));
   const solutions = roots.roots.map((root) =>
     solutionAt(standing, found, until, root, reader, excess, options),
@@ -70,7 +75,7 @@ function rangeable(
   return { between };
 }
 
-type Reader = (value: number) => Risk;
+type Reader = (value: number) => Estimated;
 
 function readerOf(standing: Standing, measure: Measure, setting: Setting): Reader {
   if (isRisk(measure)) {

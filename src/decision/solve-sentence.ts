@@ -1,20 +1,20 @@
 import { amount, levelWords, plain, rounded } from "./amount.js";
-import { measuredWords } from "./measure.js";
-import { recordWords } from "./record-words.js";
+import { measuredClause, measuredWords } from "./measure.js";
+import { conditionWords } from "./record-words.js";
 import type { Solution, Solved } from "./solution.js";
 import type { Standing } from "./standing.js";
 
 /** The answer in words: what to set, the margin, what it brings about, and on what it stands. */
 export function solveSentence(answer: Omit<Solved, "kind" | "sentence">, standing: Standing): string {
-  const { unknown, solutions, measure } = answer;
+  const { unknown, solutions } = answer;
   if (solutions.length === 0) return unsolved(answer, standing);
   const settings = solutions.map((solution) => settingWords(solution, answer)).join(", or ");
   const many = solutions.length > 1 ? `${solutions.length} settings meet the target: ` : "";
   const [first] = solutions;
-  const brought = measuredWords(answer.target, first!.achieved, first!.achievedError, standing);
+  const brought = measuredClause(answer.target, first!.achieved, first!.achievedError, standing);
   const chance =
     first!.achievedError > 0 ? ` (Monte-Carlo error ${plain(100 * first!.achievedError, 1)}%)` : "";
-  return `${many}With ${unknown} ${settings}, ${measure} is ${brought}${chance}, provided ${conditionWords(standing)}.`;
+  return `${many}With ${unknown} ${settings}, ${brought}${chance}, provided ${conditionWords(standing.rule, standing.fit)}.`;
 }
 
 function settingWords(solution: Solution, { unit, level }: Omit<Solved, "kind" | "sentence">): string {
@@ -39,8 +39,4 @@ function unsolved(answer: Omit<Solved, "kind" | "sentence">, standing: Standing)
     ? `the nearest is ${measuredWords(target, nearest.achieved, 0, standing)} with ${unknown} at ${amount(plain(nearest.value, 4), unit)}`
     : "it is never reached within the projection";
   return `No ${unknown} from ${range} brings ${measure} to the target: ${miss}.`;
-}
-
-function conditionWords({ fit }: Standing): string {
-  return fit === undefined ? "the rule and its constants hold" : `it goes on as in ${recordWords(fit)}`;
 }

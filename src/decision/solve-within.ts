@@ -10,10 +10,10 @@ export interface Roots {
 }
 
 /** Places at which a function is looked at before its crossings are refined. */
-const looks = 64;
+const manyLooks = 64;
 
 /**
- * Every crossing of zero between two ends that shows on 64 places (by equal ratios where the ends are far apart and of one
+ * Every crossing of zero between two ends that shows on 64 places, or as many as are asked for (by equal ratios where the ends are far apart and of one
  * sign), refined by Brent's method; by halving where one side is infinite or zero.
  *
  * @param options.edge - look for the edge of the part that is not above zero, for a function that is zero over a stretch.
@@ -22,9 +22,9 @@ export function solveWithin(
   excess: (value: number) => number,
   from: number,
   to: number,
-  options: { readonly tolerance?: number; readonly edge?: boolean } = {},
+  options: { readonly tolerance?: number; readonly edge?: boolean; readonly looks?: number } = {},
 ): Roots {
-  const places = spread(from, to, looks);
+  const places = spread(from, to, options.looks ?? manyLooks);
   const values = places.map(excess);
   const roots: number[] = [];
   for (let i = 1; i < places.length; i++) {

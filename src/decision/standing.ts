@@ -27,6 +27,9 @@ export interface StandingOptions {
   readonly initial?: InitialValues;
   /** Of a rule: random change by state, for risks. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
+  /** Of a rule: what a period is called, and what the present one is numbered; default "period" and 0. */
+  readonly period?: string;
+  readonly startsAt?: number;
   /** Drawn paths for risks and margins; default 2000. */
   readonly paths?: number;
   /** Default 1. */
@@ -108,13 +111,13 @@ function ruleStanding(rule: Rule, options: StandingOptions): Standing {
     ground: planned(options.inputs ?? {}),
     fitGround: undefined,
     present: 0,
-    timeAt: (row) => row,
+    timeAt: (row) => row + (options.startsAt ?? 0),
     change: ruleNoise(rule, constants, options.noise),
     plans: options.inputs ?? {},
     paths: options.paths ?? 2000,
     seed: options.seed ?? 1,
     planned,
     unitOf: (name) => rule.units[stateOf(name)] ?? "",
-    periodUnit: "period",
+    periodUnit: options.period ?? "period",
   };
 }

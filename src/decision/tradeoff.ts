@@ -2,8 +2,9 @@ import type { Fit } from "../estimate/index.js";
 import type { Rule } from "../rule/index.js";
 import { amount, plain } from "./amount.js";
 import { isRisk, type Measure, measuredWords, measureWords } from "./measure.js";
+import { expectedReader } from "./read-expected.js";
 import { measureReader } from "./read-measure.js";
-import { type Risk, riskReader } from "./read-risk.js";
+import { type Estimated, riskReader } from "./read-risk.js";
 import { refuseNoValues } from "./refusals.js";
 import { type Setting, settingOf } from "./set-value.js";
 import { withUnplanned } from "./setting-range.js";
@@ -87,9 +88,15 @@ function valuesOf(values: TradeoffOptions["values"]): readonly number[] {
   );
 }
 
-function readerOf(standing: Standing, setting: Setting, measure: Measure): (value: number) => Risk {
+/** Under random change what is expected is the mean over paths; times and constants are those of the central path. */
+function readerOf(standing: Standing, setting: Setting, measure: Measure): (value: number) => Estimated {
   if (isRisk(measure)) {
     const read = riskReader(standing, measure);
+    return (value) => read(setting, value);
+  }
+  const random = standing.change.some((noise) => noise !== undefined);
+  if (random && !("time" in measure) && !("constant" in measure)) {
+    const read = expectedReader(standing, measure);
     return (value) => read(setting, value);
   }
   const read = measureReader(standing, measure);

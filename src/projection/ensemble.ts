@@ -32,6 +32,8 @@ export interface EnsembleRun {
   readonly limits: readonly (readonly [number, number])[];
   /** One a block of paths; see `blockStreams`. */
   readonly streams: readonly RandomStream[];
+  /** Told of every step before it is taken: the path, its state vector and constants, and the absolute period. */
+  readonly onStep?: (path: number, state: Float64Array, constants: Float64Array, t: number) => void;
   /** Takes the values of all paths at row `t`, [states][paths]; NaN where a path has ended. Not to be kept. */
   readonly onRow: (t: number, values: readonly Float64Array[]) => void;
   /** Called after every block of a period; what it throws ends the run. */
@@ -90,6 +92,7 @@ function stepper(run: EnsembleRun): Advance {
       if (Number.isNaN(present[base]!)) continue;
       copy(present, base, state, 0, width);
       if (!shared) copy(starts.constants, path * size, constants, 0, size);
+      run.onStep?.(path, state, constants, t);
       compiled.step(state, constants, inputs, t, state);
       if (changed(stream)) copy(state, 0, present, base, width);
       else present.fill(Number.NaN, base, base + width);

@@ -1,7 +1,7 @@
 export type { Band } from "./band.js";
 export { type CentralPath, centralPath, type Ground, stateLimits } from "./central-path.js";
 export { type DrawnStarts, drawnStarts, unknownsDraw } from "./drawn-starts.js";
-export { blockStreams, runEnsemble, type Starts } from "./ensemble.js";
+export { blockStreams, type EnsembleRun, runEnsemble, type Starts } from "./ensemble.js";
 export { type FitGround, fitGround } from "./fit-ground.js";
 export { fittedNoise } from "./fitted-noise.js";
 export { type Forecast, forecast } from "./forecast.js";

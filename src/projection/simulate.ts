@@ -30,6 +30,10 @@ export interface SimulateOptions {
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
   /** By state: the error of a reading, reported and not carried on. */
   readonly reading?: Readonly<Record<string, Noise>>;
+  /** What a period is called, as in "month"; default "period". */
+  readonly period?: string;
+  /** What the first period is numbered, as the last recorded month is; default 0. */
+  readonly startsAt?: number;
   /** Default 4000, or 1 where nothing is random. */
   readonly paths?: number;
   /** Levels of the bands; default 0.5, 0.8, 0.95. */
@@ -52,6 +56,7 @@ export interface Simulation {
     readonly paths: number;
     readonly seed: number;
     readonly levels: readonly number[];
+    readonly period: string;
   };
   /** One a scenario. */
   readonly groups: readonly GroupForecast[];
@@ -80,7 +85,7 @@ export function simulate(rule: Rule, options: SimulateOptions): Simulation {
   checkRun(periods, paths, levels);
   const initial = initialVector(rule, options.initial);
   const compiled = compileRule(rule);
-  const settings = { periods, paths, seed, levels };
+  const settings = { periods, paths, seed, levels, period: options.period ?? "period" };
   const groups = scenariosOf(options).map(({ name, plans }) => {
     const inputs = plannedInputs(rule, plans, { recorded: () => [], rows: 0, last: periods, firstNumber: 0 });
     const ground = { rule, compiled, constants, initial, inputs, from: 0, periods };
@@ -144,7 +149,7 @@ function simulated(
     scenario,
     plans,
     index,
-    time: index,
+    time: index.map((t) => t + (options.startsAt ?? 0)),
     recordEnd: 0,
     states: rule.states.map((state, s) => ({
       state,
@@ -163,6 +168,6 @@ function simulated(
     passages: passagesOf(watches, found.passages),
     left,
     leftError: Math.sqrt((left * (1 - left)) / paths),
-    warnings: rangeWarnings(central, 0, left, paths),
+    warnings: rangeWarnings(central, options.startsAt ?? 0, left, paths),
   };
 }

@@ -77,7 +77,7 @@ test("the elasticities of the time to a density are those of its closed form", (
   expect(found.rows[0]!.name).toBe("r");
   expect(found.answer).toBeCloseTo(8.145, 3);
   expect(found.sentence).toMatch(
-    /^the time at which N rises to 0\.8 is hour 8\.14\d+; it hangs most on r: ten per cent lower and higher give hour 9\.05\d* and hour 7\.40\d*, about 1\.0% for each 1%\. What the record leaves open matters most through /,
+    /^N rises to 0\.8 at hour 8\.14\d+; it hangs most on r: ten per cent lower and higher give hour 9\.05\d* and hour 7\.40\d*, about 1\.0% for each 1%\. What the record leaves open matters most through /,
   );
 });
 

@@ -39,7 +39,7 @@ describe("a loan", () => {
     expect(found.solutions[0]!.value).toBe(Math.ceil(level * 100) / 100);
     expect(found.solutions[0]!.achieved).toBe(300);
     expect(found.sentence).toBe(
-      "With payment at or above 1293.47 EUR, the time at which owed falls to 0 EUR is period 300, provided the rule and its constants hold.",
+      "With payment at or above 1293.47 EUR, owed falls to 0 EUR at period 300, provided payment goes as planned and the rule and its constants hold.",
     );
   });
 
@@ -117,7 +117,7 @@ test("a fit's answer has an interval, and solving it back gives the target", () 
   expect(solution!.margin!.lower!).toBeLessThan(solution!.value);
   expect(solution!.margin!.upper!).toBeGreaterThan(solution!.value);
   expect(found.sentence).toMatch(
-    /^With N\[0\] at 0\.0\d+ \(95% interval 0\.0\d+ to 0\.0\d+\), the time at which N rises to 0\.8 is hour 6, provided it goes on as in the record of 21 values to hour 10\.$/,
+    /^With N\[0\] at 0\.0\d+ \(95% interval 0\.0\d+ to 0\.0\d+\), N rises to 0\.8 at hour 6, provided it goes on as in the record of 21 values to hour 10\.$/,
   );
   expect(
     reaches(forecast(fitted, { periods: 20 }), { value: 0.8, direction: "rising" }).groups[0]!.time,
