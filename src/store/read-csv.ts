@@ -1,44 +1,33 @@
-import { open, readFile } from "node:fs/promises";
+import { readFile } from "node:fs/promises";
 import { columnNames } from "./column-names.js";
 import { type TextColumn, typedColumns } from "./csv-columns.js";
 import { delimiterOf } from "./csv-dialect.js";
 import { type CsvRecord, csvRecords } from "./csv-records.js";
 import { decodedText } from "./decoded-text.js";
 import { decimalSignOf } from "./number-form.js";
+import { plainCsv } from "./plain-csv.js";
 import type { ReadOptions } from "./read-options.js";
 import { readPlainCsv } from "./read-plain-csv.js";
 import { emptyFile, headerMissing, raggedRow, unendedQuote } from "./refusals.js";
 import type { FileColumns } from "./stored-table.js";
-
-const headBytes = 1 << 18;
+import { headBytes, textHead } from "./text-head.js";
 
 /**
  * Reads delimited text. A plain file (UTF-8, decimal points, no dates to put in order) is read by the database
  * engine; any other, and one that the engine refuses, is read here, where every cell can be looked at.
  */
 export async function readCsv(path: string, shownPath: string, options: ReadOptions): Promise<FileColumns> {
-  const head = await headOf(path);
-  const plain = options.encoding === undefined && options.skip === undefined && options.missing === undefined;
-  if (plain && head.isWholeText) {
-    const delimiter = options.delimiter ?? delimiterOf(head.text, shownPath);
-    const read = await readPlainCsv(path, head.text, delimiter, options);
+  const { encoding, skip, missing, header = true } = options;
+  const mayBePlain = encoding === undefined && skip === undefined && missing === undefined && header;
+  const head = mayBePlain ? await textHead(path) : undefined;
+  if (head !== undefined) {
+    const delimiter = options.delimiter ?? delimiterOf(head, shownPath);
+    const relation = plainCsv(path, head, delimiter, options);
+    const read = relation === undefined ? undefined : await readPlainCsv(relation);
     if (read !== undefined) return read;
   }
-  const text = decodedText(await readFile(path), shownPath, options.encoding);
-  return readText(skipLines(text, options.skip ?? 0), shownPath, options);
-}
-
-async function headOf(path: string): Promise<{ readonly text: string; readonly isWholeText: boolean }> {
-  const file = await open(path);
-  try {
-    const { bytesRead, buffer } = await file.read(Buffer.alloc(headBytes), 0, headBytes, 0);
-    const bytes = buffer.subarray(0, bytesRead);
-    const end = bytesRead < headBytes ? bytesRead : bytes.lastIndexOf(10) + 1;
-    const text = bytes.toString("utf8", 0, end);
-    return { text, isWholeText: end > 0 && !text.includes("\ufffd") && !text.includes("\0") };
-  } finally {
-    await file.close();
-  }
+  const text = decodedText(await readFile(path), shownPath, encoding);
+  return readText(skipLines(text, skip ?? 0), shownPath, options);
 }
 
 function skipLines(text: string, lines: number): string {
@@ -52,7 +41,7 @@ function skipLines(text: string, lines: number): string {
 }
 
 /** Reads delimited text cell by cell. */
-export function readText(text: string, path: string, options: ReadOptions): FileColumns {
+function readText(text: string, path: string, options: ReadOptions): FileColumns {
   const delimiter = options.delimiter ?? delimiterOf(wholeLines(text), path);
   const records = recordsOf(text, delimiter, path);
   if (records.length === 0) throw emptyFile(path);
@@ -96,7 +85,7 @@ function headerOf(records: readonly CsvRecord[], path: string, options: ReadOpti
   return first;
 }
 
-export function isAllNumbers(cells: readonly string[]): boolean {
+function isAllNumbers(cells: readonly string[]): boolean {
   return cells.every((cell) => decimalSignOf(cell) !== undefined);
 }
 

@@ -164,3 +164,25 @@ export function formulaWithoutValue(path: string, row: number, column: string, f
 export function notWritable(path: string, reason: string, remedy: string): ModelError {
   return new ModelError("not-writable", `"${path}" was not written: ${reason}. ${remedy}`, { path, reason });
 }
+
+export function notStreamable(path: string): ModelError {
+  return new ModelError(
+    "not-streamable",
+    `"${path}" cannot be read series by series: its cells must be looked at one by one. ` +
+      'Read it once and write it as Parquet: await writeRecord(await readRecord(path), "record.parquet").',
+    { path },
+  );
+}
+
+export function noSuchColumn(name: string, names: readonly string[], nearest: readonly string[]): ModelError {
+  const hint = nearest.length > 0 ? ` Did you mean ${nearest.map((n) => `"${n}"`).join(" or ")}?` : "";
+  return new ModelError(
+    "no-such-column",
+    `The file has no column "${name}". Its columns are ${listed(names)}.${hint}`,
+    {
+      name,
+      names,
+      nearest,
+    },
+  );
+}
