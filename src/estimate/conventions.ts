@@ -9,6 +9,7 @@ export function conventionsOf(options: FitOptions, groups: readonly GroupFit[]):
     ...(filter ? [filterSentence(filter)] : []),
     spreadSentence(options),
     intervalSentence(options, groups),
+    ...groupSentence(options),
     ...(options.factor === undefined
       ? []
       : ["The record reads a state up to a factor, which counts as an unknown."]),
@@ -57,4 +58,14 @@ function intervalSentence(options: FitOptions, groups: readonly GroupFit[]): str
   const cut =
     options.cut === "chi-square" ? "profile cut chi-square(1), sigma^2 = RSS/n" : "profile cut F(1, n - p)";
   return `Standard errors by sigma^2 = RSS/(n - p); ${cut}; AICc by RSS/n on the fitting scale, counting sigma.`;
+}
+
+function groupSentence({ groups = "separate" }: FitOptions): string[] {
+  if (groups === "combined")
+    return ["The same constants and sigma for all groups, an initial state for each."];
+  if (groups === "mixed")
+    return [
+      "Constants differ among groups as draws from a normal population, integrated out by Laplace's method; a group's own are drawn towards its means.",
+    ];
+  return [];
 }

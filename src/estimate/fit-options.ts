@@ -43,3 +43,8 @@ export interface FitOptions {
 export function onLogScale(options: FitOptions): boolean {
   return options.spread === "proportional";
 }
+
+/** Whether a record without censored values is fitted by least squares. */
+export function bySquares({ errors, spread }: FitOptions): boolean {
+  return errors !== "both" && spread !== "poisson" && spread !== "negative-binomial";
+}

@@ -3,7 +3,8 @@ import type { Observations } from "../record/index.js";
 import type { Rule } from "../rule/index.js";
 import { checkOptions } from "./check-options.js";
 import { conventionsOf } from "./conventions.js";
-import { fitGroup } from "./fit-group.js";
+import type { Estimate } from "./estimate-of.js";
+import { fitGroups } from "./fit-group.js";
 import type { FitOptions } from "./fit-options.js";
 import type { GroupFit } from "./group-fit.js";
 import { matchStates } from "./match-states.js";
@@ -16,6 +17,8 @@ export interface Fit {
   readonly observations: Observations;
   readonly options: FitOptions;
   readonly groups: readonly GroupFit[];
+  /** Of groups fitted together: the constants that hold for all, or their means and spreads among the groups. */
+  readonly population?: readonly Estimate[];
   readonly warnings: readonly Warning[];
   /** The conventions behind the numbers, as printed with every table of the fit. */
   readonly conventions: readonly string[];
@@ -44,13 +47,14 @@ export interface Fit {
 export function fit(rule: Rule, observations: Observations, options: FitOptions): Fit {
   checkOptions(rule, options);
   const matched = matchStates(rule, observations);
-  const groups = matched.groups.map((group) => fitGroup(rule, group, options));
+  const { groups, population } = fitGroups(rule, matched.groups, options);
   return Object.freeze({
     kind: "fit",
     rule,
     observations: matched,
     options: Object.freeze({ ...options }),
     groups: Object.freeze(groups),
+    ...(population && { population: Object.freeze(population) }),
     warnings: Object.freeze([...rule.findings]),
     conventions: Object.freeze(conventionsOf(options, groups)),
   });

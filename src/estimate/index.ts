@@ -1,6 +1,7 @@
 export { type Bootstrap, type BootstrapOptions, type BootstrapRow, bootstrap } from "./bootstrap.js";
 export type { Criteria } from "./criteria.js";
 export type { Estimate } from "./estimate-of.js";
+export { type EstimateChange, type Extended, extend } from "./extend.js";
 export { type Fit, fit } from "./fit.js";
 export type { ErrorKind, FitOptions, Spread } from "./fit-options.js";
 export type { FitPoint } from "./fit-points.js";

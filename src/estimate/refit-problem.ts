@@ -1,7 +1,7 @@
 import type { ObservedGroup } from "../record/index.js";
 import type { Rule } from "../rule/index.js";
 import type { Fit } from "./fit.js";
-import { type FitOptions, onLogScale } from "./fit-options.js";
+import { bySquares, type FitOptions } from "./fit-options.js";
 import type { GroupFit } from "./group-fit.js";
 import { type Prepared, prepared } from "./prepared.js";
 import { refuseResampling } from "./refusals.js";
@@ -26,9 +26,4 @@ export function refitProblem(fit: Fit, fitted: GroupFit): RefitProblem {
   const group = fit.observations.groups.find((each) => each.name === fitted.group)!;
   const at = Float64Array.from(fitted.estimates, ({ value }) => value);
   return { rule, group, options, unknowns, at, ...prepared(rule, group, unknowns, options) };
-}
-
-function bySquares(options: FitOptions): boolean {
-  const normal = onLogScale(options) || options.spread === undefined || options.spread === "constant";
-  return options.errors !== "both" && (normal || typeof options.spread === "object");
 }

@@ -166,3 +166,36 @@ export function refuseFewDraws(draws: number): ModelError {
     { draws },
   );
 }
+
+export function refuseTogether(how: string): ModelError {
+  return new ModelError(
+    "groups-not-together",
+    `Groups are fitted { groups: "${how}" } by least squares only: not counts, not censored values, not errors in both. Fit them ` +
+      '{ groups: "separate" }, and compare the estimates.',
+    { how },
+  );
+}
+
+export function refuseFewGroups(count: number): ModelError {
+  return new ModelError(
+    "too-few-groups",
+    `${count} groups do not tell how constants spread among groups. Give at least 3, better 6, or fit { groups: "combined" }.`,
+    { count },
+  );
+}
+
+export function refuseNoNewRows(): ModelError {
+  return new ModelError(
+    "no-new-rows",
+    "No rows were given to extend the fit with. Give the rows that came in after those of the fit.",
+  );
+}
+
+export function refuseOverlap(group: string, time: number): ModelError {
+  return new ModelError(
+    "rows-overlap",
+    `The new rows${group && ` of "${group}"`} begin at ${time}, inside the record that the fit already has. Give only later rows; to change ` +
+      "earlier ones, fit the corrected record anew.",
+    { group, time },
+  );
+}

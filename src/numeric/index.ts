@@ -21,6 +21,7 @@ export { ModelError } from "./model-error.js";
 export { editDistance, nearestNames } from "./nearest-names.js";
 export { quantile } from "./quantile.js";
 export { type RandomStream, randomStream } from "./random-stream.js";
+export { rotateRowIn } from "./rotate-row-in.js";
 export { secondDerivatives } from "./second-derivatives.js";
 export { type SquaresWorkspace, squaresWorkspace } from "./squares-workspace.js";
 export type { StopReason } from "./stop-reason.js";
