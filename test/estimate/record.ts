@@ -1,0 +1,52 @@
+import type { Observations, ObservedGroup } from "../../src/record/index.js";
+
+/** Columns of one series, by name; `t` holds the periods, 0, 1, ... when absent. */
+export type Columns = Readonly<Record<string, readonly number[]>>;
+
+/** A record of one group, or of several by name, with the columns named in `inputs` as inputs and the rest as states. */
+export function record(
+  given: Columns | Readonly<Record<string, Columns>>,
+  extra: Partial<ObservedGroup> & { readonly inputNames?: readonly string[] } = {},
+): Observations {
+  const isOne = Object.values(given).some(Array.isArray);
+  const series = (isOne ? { "": given } : given) as Readonly<Record<string, Columns>>;
+  const { inputNames = [], ...fields } = extra;
+  const groups = Object.entries(series).map(([name, columns]) => groupOf(name, columns, inputNames, fields));
+  const read = groups.reduce((sum, group) => sum + group.index.length, 0);
+  return {
+    kind: "observations",
+    groups,
+    states: Object.keys(groups[0]!.values).map((name) => ({ name, column: name, unit: "" })),
+    inputs: inputNames,
+    period: { column: "t", unit: "week", step: { every: 1, of: "week" } },
+    measured: "level",
+    order: "",
+    findings: [],
+    counts: { read, used: read, flagged: 0, corrected: 0, refused: 0 },
+  };
+}
+
+function groupOf(
+  name: string,
+  columns: Columns,
+  inputNames: readonly string[],
+  fields: Partial<ObservedGroup>,
+): ObservedGroup {
+  const count = Object.values(columns)[0]!.length;
+  const time = Float64Array.from(columns["t"] ?? Array.from({ length: count }, (_, t) => t));
+  const pick = (wanted: (column: string) => boolean): Record<string, Float64Array> =>
+    Object.fromEntries(
+      Object.entries(columns)
+        .filter(([column]) => column !== "t" && wanted(column))
+        .map(([column, values]) => [column, Float64Array.from(values)]),
+    );
+  return {
+    name,
+    index: Int32Array.from(time, (at) => at - time[0]!),
+    time,
+    values: pick((column) => !inputNames.includes(column)),
+    inputs: pick((column) => inputNames.includes(column)),
+    rows: Int32Array.from({ length: count }, (_, row) => row + 1),
+    ...fields,
+  };
+}

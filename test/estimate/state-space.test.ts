@@ -1,0 +1,87 @@
+import { describe, expect, test } from "vitest";
+import { type Estimate, type Fit, fit } from "../../src/estimate/index.js";
+import { randomStream } from "../../src/numeric/index.js";
+import { recurrence } from "../../src/rule/index.js";
+import { record } from "./record.js";
+
+const of = (fitted: Fit, name: string): Estimate =>
+  fitted.groups[0]!.estimates.find((estimate) => estimate.name === name)!;
+
+/** A path with errors in its steps, read with errors, both on the log scale. */
+function wandering(step: (level: number) => number, first: number, count: number, seed: number): number[] {
+  const stream = randomStream(seed);
+  const read: number[] = [];
+  for (let t = 0, level = first; t < count; t++) {
+    read.push(level * Math.exp(0.1 * stream.normal()));
+    level = step(level) * Math.exp(0.1 * stream.normal());
+  }
+  return read;
+}
+
+describe("errors in both the process and the observation", () => {
+  test("the exact likelihood of a few values is that of their joint normal distribution", () => {
+    // x' = c + b x + e, read with error d: mean c/(1-b), covariance q b^|i-j|/(1-b^2) + r on the diagonal.
+    const rule = recurrence("x[t+1] = c + b*x");
+    const x = [2.1, 1.4, 3.2, 2.8, 1.1, 2.6, 2.2, 3.9];
+    const fitted = fit(rule, record({ x }), { errors: "both" });
+    const [c, b] = ["c", "b"].map((name) => of(fitted, name).value) as [number, number];
+    const [q, r] = ["process error", "observation error"].map((name) => of(fitted, name).value ** 2) as [
+      number,
+      number,
+    ];
+    const covariance = x.map((_, i) =>
+      x.map((_, j) => (q * b ** Math.abs(i - j)) / (1 - b * b) + (i === j ? r : 0)),
+    );
+    expect(fitted.groups[0]!.filter!.start).toBe("stationary");
+    expect(
+      Math.abs(
+        fitted.groups[0]!.criteria.logLikelihood -
+          jointNormal(
+            x.map((v) => v - c / (1 - b)),
+            covariance,
+          ),
+      ),
+    ).toBeLessThan(1e-8);
+  });
+
+  test("a rule that is not linear on the scale is filtered by its slope, and finds what made the record", () => {
+    const rule = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)");
+    const N = wandering((level) => (1.5 * level) / (1 + (0.5 * level) / 100), 5, 80, 4);
+    const fitted = fit(rule, record({ N }), { errors: "both", spread: "proportional" });
+    expect(fitted.groups[0]!.filter).toMatchObject({ start: "diffuse", method: "extended" });
+    const { lower, upper } = of(fitted, "K").profile;
+    expect(lower!).toBeLessThan(100);
+    expect(upper!).toBeGreaterThan(100);
+    expect(of(fitted, "R").profile.lower!).toBeLessThan(1.5);
+    expect(of(fitted, "R").profile.upper!).toBeGreaterThan(1.5);
+  });
+
+  test("a known error of reading narrows the rest", () => {
+    const stream = randomStream(6);
+    const x = Array.from({ length: 40 }, () => 0);
+    for (let t = 1; t < 40; t++) x[t] = 0.7 * x[t - 1]! + stream.normal();
+    const read = x.map((value) => value + 0.5 * stream.normal());
+    const rule = recurrence("x[t+1] = b*x");
+    const open = fit(rule, record({ x: read }), { errors: "both" });
+    const known = fit(rule, record({ x: read }), { errors: "both", spread: { sd: 0.5 } });
+    expect(known.groups[0]!.estimates.map(({ name }) => name)).toEqual(["b", "process error"]);
+    const width = ({ profile }: Estimate): number =>
+      (profile.upper ?? Infinity) - (profile.lower ?? -Infinity);
+    expect(width(of(known, "b"))).toBeLessThan(width(of(open, "b")));
+  });
+});
+
+/** Log density of a normal vector, by elimination. */
+function jointNormal(values: readonly number[], covariance: readonly (readonly number[])[]): number {
+  const rows = covariance.map((row, i) => [...row, values[i]!]);
+  let sum = 0;
+  for (let i = 0; i < rows.length; i++) {
+    const pivot = rows[i]![i]!;
+    sum += Math.log(2 * Math.PI * pivot) + rows[i]![rows.length]! ** 2 / pivot;
+    for (let j = i + 1; j < rows.length; j++) {
+      const factor = rows[j]![i]! / pivot;
+      for (let k = i; k <= rows.length; k++) rows[j]![k] = rows[j]![k]! - factor * rows[i]![k]!;
+    }
+  }
+  return -0.5 * sum;
+}
