@@ -23,3 +23,10 @@ export type {
 export { observations } from "./observe.js";
 export type { CalendarName } from "./period/calendar.js";
 export { packed, tableOfRows } from "./table-of-rows.js";
+export { type FillOptions, filled } from "./tables/filled.js";
+export type { PeriodsOf } from "./tables/placed-series.js";
+export { type ShiftOptions, shifted } from "./tables/shifted.js";
+export type { Summary } from "./tables/summary-of.js";
+export { type RegroupOptions, toPeriods } from "./tables/to-periods.js";
+export { type LongerOptions, longer, type WiderOptions, wider } from "./tables/wider.js";
+export { type WindowOptions, windowed } from "./tables/windowed.js";

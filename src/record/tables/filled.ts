@@ -1,0 +1,111 @@
+import { type Column, type ColumnTable, columnNamed, isEmpty } from "../column-table.js";
+import { numberColumn } from "../number-column.js";
+import { optionWrong } from "../refusals.js";
+import { packed } from "../table-of-rows.js";
+import { type PeriodsOf, type PlacedTable, placed } from "./placed-series.js";
+
+/** How a missing value is filled: the one before it, a line between its neighbours, or a number. */
+export type FillRule = "previous" | "between" | number;
+
+/** What to fill, and by which rule. */
+export interface FillOptions extends PeriodsOf {
+  readonly column: string;
+  readonly with: FillRule;
+}
+
+/**
+ * Gives a table a row for every period from first to last of each series, and fills the empty cells of one
+ * column by the rule stated. A column "stock filled" says which cells were: nothing passes for recorded.
+ *
+ * Cells before the first and after the last recorded value are never filled by "previous" or "between" beyond
+ * what these say. Other columns are empty in the new rows, except those that tell series and periods apart.
+ *
+ * @throws {ModelError} `option-wrong` (a pair of period columns, or dates, name no missing period) |
+ *   `missing-column` | `not-a-number`, and those of the period column.
+ */
+export function filled(record: ColumnTable, options: FillOptions): ColumnTable {
+  const rule = options.with;
+  if (rule !== "previous" && rule !== "between" && typeof rule !== "number")
+    throw optionWrong("with", rule, '"previous", "between" or a number');
+  const place = placed(record, options);
+  if (place.axis.isDated)
+    throw optionWrong(
+      "period",
+      options.period,
+      "a column of numbers, so that the missing periods can be named",
+    );
+  const { values } = numberColumn(
+    columnNamed(place.table, options.column, "the column to fill"),
+    options.column,
+  );
+  const rows = place.series.flatMap((series) => everyPeriod(series.rows, series.index));
+  const cells = place.series.flatMap(({ rows: own, index }) => filledSeries(own, index, values, rule));
+  return assembled(place, options.column, rows, cells);
+}
+
+/** The row of each period of a series, or its first row and the steps from there where it has none. */
+type PeriodRow = { readonly row: number } | { readonly first: number; readonly step: number };
+
+function everyPeriod(rows: Int32Array, index: Int32Array): PeriodRow[] {
+  const rowAt = new Map(Array.from(index, (step, i) => [step, rows[i]!]));
+  return Array.from({ length: index[index.length - 1]! + 1 }, (_, step) => {
+    const row = rowAt.get(step);
+    return row === undefined ? { first: rows[0]!, step } : { row };
+  });
+}
+
+function filledSeries(
+  rows: Int32Array,
+  index: Int32Array,
+  values: Float64Array,
+  rule: FillRule,
+): readonly { value: number; was: boolean }[] {
+  const known = new Map(
+    Array.from(index, (step, i) => [step, values[rows[i]!]!]).filter(([, value]) => !Number.isNaN(value)) as [
+      number,
+      number,
+    ][],
+  );
+  const steps = [...known.keys()];
+  return Array.from({ length: index[index.length - 1]! + 1 }, (_, step) => {
+    const value = known.get(step);
+    if (value !== undefined) return { value, was: true };
+    const before = steps.filter((at) => at < step).at(-1);
+    const after = steps.find((at) => at > step);
+    return { value: fill(rule, step, known, before, after), was: false };
+  });
+}
+
+function fill(
+  rule: FillRule,
+  step: number,
+  known: ReadonlyMap<number, number>,
+  before: number | undefined,
+  after: number | undefined,
+): number {
+  if (typeof rule === "number") return rule;
+  if (before === undefined || (rule === "between" && after === undefined)) return Number.NaN;
+  const from = known.get(before)!;
+  if (rule === "previous") return from;
+  return from + ((known.get(after!)! - from) * (step - before)) / (after! - before);
+}
+
+function assembled(
+  { table, axis, by }: PlacedTable,
+  column: string,
+  rows: readonly PeriodRow[],
+  cells: readonly { readonly value: number; readonly was: boolean }[],
+): ColumnTable {
+  const every = axis.calendar.step.every;
+  const cellOf = (name: string, source: Column, at: PeriodRow, i: number): unknown => {
+    if (name === column) return cells[i]!.value;
+    if ("row" in at) return source[at.row];
+    if (name === axis.column) return axis.time[at.first]! + at.step * every;
+    return by.includes(name) ? source[at.first] : null;
+  };
+  const columns = table.columns.map((source, c) =>
+    packed(rows.map((at, i) => cellOf(table.names[c]!, source, at, i))),
+  );
+  const marks = cells.map(({ was, value }) => !was && !isEmpty(value));
+  return { names: [...table.names, `${column} filled`], columns: [...columns, marks] };
+}

@@ -1,0 +1,84 @@
+import { type ColumnTable, columnNamed } from "../column-table.js";
+import { numberColumn } from "../number-column.js";
+import type { StepLength } from "../observations.js";
+import type { CalendarName } from "../period/calendar.js";
+import { type PeriodAxis, periodAxis } from "../period/period-axis.js";
+import { optionWrong } from "../refusals.js";
+import { tableOfRows } from "../table-of-rows.js";
+import { type PeriodsOf, type PlacedSeries, placed } from "./placed-series.js";
+import { type Summary, summaryOf } from "./summary-of.js";
+
+/** Which longer period to count by, and how each column is taken over it. */
+export interface RegroupOptions extends PeriodsOf {
+  readonly to: StepLength | CalendarName;
+  /** A flow adds up ("sum"); a level at an instant is its "last" one. */
+  readonly take: Readonly<Record<string, Summary>>;
+}
+
+/**
+ * A table with one row a longer period: days become months, weeks become quarters. A period in which a value or a
+ * row is missing has none: a part of a month is not a month. The column "rows" counts the recorded rows of each
+ * period, so that one begun before the record or broken off by its end shows.
+ *
+ * @throws {ModelError} `missing-column` | `not-a-number` | `option-wrong`, and those of the period column.
+ */
+export function toPeriods(record: ColumnTable, options: RegroupOptions): ColumnTable {
+  const { table, axis, by, series } = placed(record, options);
+  const longer = periodAxis(table, options.period, options.to);
+  const { of } = axis.calendar.step;
+  if (!axis.isDated && longer.calendar.step.of !== of)
+    throw optionWrong("to", options.to, `a number of ${of}, because the periods are numbers and not dates`);
+  const taken = Object.entries(options.take).map(([name, take]) => ({
+    name,
+    summary: summaryOf(take),
+    values: numberColumn(columnNamed(table, name, "a column to take over"), name).values,
+  }));
+  const rows = series.flatMap((own) => {
+    const broken = brokenPeriods(own, longer);
+    return Array.from(rowsByPeriod(own, longer), ([period, inside]) => ({
+      ...Object.fromEntries(by.map((name) => [name, columnNamed(table, name, "a series")[inside[0]!]])),
+      [axis.column]: axis.isDated ? axis.written(inside[0]!) : axis.time[inside[0]!],
+      ...Object.fromEntries(
+        taken.map(({ name, summary, values }) => [
+          name,
+          broken.has(period) ? Number.NaN : whole(inside, values, summary),
+        ]),
+      ),
+      rows: inside.length,
+    }));
+  });
+  return tableOfRows(rows);
+}
+
+function rowsByPeriod({ rows }: PlacedSeries, longer: PeriodAxis): ReadonlyMap<number, readonly number[]> {
+  const periods = new Map<number, number[]>();
+  for (const row of rows) {
+    const period = Math.floor(longer.position[row]!);
+    periods.set(period, [...(periods.get(period) ?? []), row]);
+  }
+  return periods;
+}
+
+/** Longer periods in which a row of the series is missing: its moment lies evenly between its neighbours'. */
+function brokenPeriods({ rows, index }: PlacedSeries, longer: PeriodAxis): ReadonlySet<number> {
+  const broken = new Set<number>();
+  const { moments, calendar, position } = longer;
+  for (let i = 1; i < rows.length; i++) {
+    const [before, after, steps] = [rows[i - 1]!, rows[i]!, index[i]! - index[i - 1]!];
+    for (let step = 1; step < steps; step++) {
+      const between = (of: Float64Array): number => of[before]! + ((of[after]! - of[before]!) * step) / steps;
+      const at = moments && calendar.ofDate ? calendar.ofDate(between(moments)) : between(position);
+      broken.add(Math.floor(at));
+    }
+  }
+  return broken;
+}
+
+function whole(
+  rows: readonly number[],
+  values: Float64Array,
+  summary: (values: readonly number[]) => number,
+): number {
+  const inside = rows.map((row) => values[row]!);
+  return inside.some(Number.isNaN) ? Number.NaN : summary(inside);
+}
