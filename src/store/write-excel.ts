@@ -1,8 +1,8 @@
 import { writeFile } from "node:fs/promises";
 import type { CellObject, WorkSheet } from "xlsx";
 import { type ColumnTable, rowCount } from "../record/index.js";
-import { workbooks } from "./read-excel.js";
 import { notWritable } from "./refusals.js";
+import { workbooks } from "./workbooks.js";
 import type { NamedTable, WriteOptions } from "./write-options.js";
 
 /** The most rows and the longest text that a sheet holds (ECMA-376 leaves it to programs; these are the usual limits). */
