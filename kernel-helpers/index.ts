@@ -59,6 +59,8 @@ export type {
   Comparison,
   DensityDependence,
   DensityOptions,
+  Proposal,
+  ProposeOptions,
 } from "../src/evidence/index.js";
 export { leastSquares, ModelError } from "../src/numeric/index.js";
 export type {
@@ -103,6 +105,7 @@ export {
 export { type Explanation, explain } from "./commands/explain.js";
 export { fit } from "./commands/fits.js";
 export { forecast, simulate } from "./commands/projections.js";
+export { propose } from "./commands/proposals.js";
 export {
   differences,
   observations,

@@ -20,3 +20,4 @@ export {
 } from "./density-dependence.js";
 export type { ForecastScores } from "./forecasts/forecast-scores.js";
 export type { RollingOrigin } from "./forecasts/rolling-origin.js";
+export { type Proposal, type ProposedRule, type ProposeOptions, propose } from "./propose/propose.js";

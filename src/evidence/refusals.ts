@@ -16,6 +16,15 @@ export function refuseUnlikeRecords(first: string, second: string): ModelError {
   );
 }
 
+export function refuseUnlikeStarts(first: number, second: number): ModelError {
+  return new ModelError(
+    "unlike-starts",
+    `One rule compares ${first} steps and the other ${second}: a rule that reads past values begins later. Fit the rule ` +
+      "without them to the record without its first rows, so that both explain the same steps.",
+    { first, second },
+  );
+}
+
 export function refuseUnlikeErrors(): ModelError {
   return new ModelError(
     "unlike-errors",
@@ -50,5 +59,24 @@ export function refuseNoDensity(group: string, state: string): ModelError {
     `The test needs at least four steps of one period between positive levels of ${state}${who}. Leave out levels of ` +
       "zero with a reason, name the state with { state }, or wait for more rows.",
     { group, state },
+  );
+}
+
+export function refuseSeveralStates(states: readonly string[], given: string | undefined): ModelError {
+  const wrong =
+    given === undefined
+      ? `The record holds ${states.length} states (${states.join(", ")}), and rules are proposed for one.`
+      : `The record holds no state "${given}".`;
+  return new ModelError("several-states", `${wrong} Name one with { state: "${states[0]}" }.`, {
+    states,
+    given,
+  });
+}
+
+export function refuseNothingFits(reason: string): ModelError {
+  return new ModelError(
+    "nothing-fits",
+    `No rule of the catalogue could be fitted to the record. The first said: ${reason}`,
+    { reason },
   );
 }

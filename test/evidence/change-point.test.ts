@@ -68,8 +68,8 @@ describe("changePoint", () => {
   });
 
   test("refuses a record too short to be parted", () => {
-    expect(() =>
-      changePoint(crowding, series([1, 2, 3, 5, 6, 7]), onLog),
-    ).toThrowErrorMatchingInlineSnapshot(`[ModelError: 5 steps leave no date with enough of them on either side to fit the rule twice. Use a rule with fewer constants, hold some with { fixed }, or wait for more rows.]`);
+    expect(() => changePoint(crowding, series([1, 2, 3, 5, 6, 7]), onLog)).toThrowErrorMatchingInlineSnapshot(
+      `[ModelError: 5 steps leave no date with enough of them on either side to fit the rule twice. Use a rule with fewer constants, hold some with { fixed }, or wait for more rows.]`,
+    );
   });
 });

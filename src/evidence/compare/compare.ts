@@ -1,6 +1,6 @@
 import type { Fit } from "../../estimate/index.js";
 import { type RollingOrigin, rollingOrigin } from "../forecasts/rolling-origin.js";
-import { refuseOneFit, refuseUnlikeErrors, refuseUnlikeRecords } from "../refusals.js";
+import { refuseOneFit, refuseUnlikeErrors, refuseUnlikeRecords, refuseUnlikeStarts } from "../refusals.js";
 import { type ComparisonRow, comparisonRows } from "./comparison-row.js";
 import { type ComparisonVerdict, comparisonVerdict } from "./comparison-verdict.js";
 import { type LikelihoodRatio, likelihoodRatios } from "./likelihood-ratio.js";
@@ -47,7 +47,7 @@ export interface Comparison {
  * differ, fits on the log scale are brought to the record's own scale by the Jacobian, -sum ln(y). With `decide`, what
  * every rule that stands leads to is told, and none is called best.
  *
- * @throws {ModelError} `too-few-fits` | `unlike-records` | `unlike-errors`.
+ * @throws {ModelError} `too-few-fits` | `unlike-records` | `unlike-errors` | `unlike-starts`.
  * @see Burnham, K. P. and Anderson, D. R. (2002), Model Selection and Multimodel Inference, sections 2.4, 2.6, 2.9.
  * @example compare([crowdingFit, shelteredFit]).verdict.kind; // "supported"
  */
@@ -77,8 +77,9 @@ function planOf(
   { origins, horizon, level = 0.8 }: CompareOptions,
 ): Parameters<typeof rollingOrigin>[1] {
   const rows = Math.min(...fit.observations.groups.map((group) => group.index.length));
+  const count = origins ?? Math.min(12, Math.round(rows / 3));
   return {
-    origins: origins ?? Math.min(12, Math.round(rows / 3)),
+    leftOut: Array.from({ length: count }, (_, i) => count - i),
     horizon: horizon ?? Math.max(1, Math.round(rows / 10)),
     level,
   };
@@ -86,6 +87,9 @@ function planOf(
 
 function refuseUnlike(first: Fit, other: Fit): void {
   if (first.options.errors !== other.options.errors) throw refuseUnlikeErrors();
+  const lags = first.rule.memory.length - other.rule.memory.length;
+  if (first.options.errors === "process" && lags !== 0 && first.groups[0]!.count !== other.groups[0]!.count)
+    throw refuseUnlikeStarts(first.groups[0]!.count, other.groups[0]!.count);
   const same =
     first.groups.length === other.groups.length &&
     first.groups.every((group, g) => {

@@ -1,4 +1,5 @@
 import type { Fit } from "../../estimate/index.js";
+import { isWorse } from "../forecasts/is-worse.js";
 import type { RollingOrigin } from "../forecasts/rolling-origin.js";
 import type { ComparisonRow } from "./comparison-row.js";
 import { naiveCriteria } from "./naive-criteria.js";
@@ -13,7 +14,7 @@ export interface ComparisonVerdict {
 /** Differences of AICc within which rivals are not told apart. */
 export const undecidedWithin = 2;
 /** Standard errors by which a naive forecast must be ahead before it speaks against a rule. */
-const clearlyWorse = 2;
+const clearly = 2;
 
 /** Judges rivals: adequate ones within 2 of the lowest AICc stand; none does that is no better than a naive rule. */
 export function comparisonVerdict(
@@ -40,19 +41,10 @@ function failingOf(fit: Fit, rolled: RollingOrigin | undefined): string | undefi
     return `"${best.name}" explains the record as well as "${fit.rule.text}" and needs fewer constants`;
   const scores = rolled?.scores.find(({ name, kind }) => kind === "rule" && name === fit.rule.text);
   const worse = rolled?.scores.find(
-    (other) => other.kind === "naive" && scores !== undefined && isWorse(scores.each, other.each),
+    (other) => other.kind === "naive" && scores !== undefined && isWorse(scores.each, other.each, clearly),
   );
   if (worse === undefined) return undefined;
   return `forecasts of "${fit.rule.text}" from earlier parts of the record did clearly worse than "${worse.name}"`;
-}
-
-/** Whether the mean of paired differences of scores is above zero by more than its standard errors. */
-function isWorse(scores: readonly number[], naive: readonly number[]): boolean {
-  const differences = scores.map((score, i) => score - naive[i]!);
-  const count = differences.length;
-  const mean = differences.reduce((sum, value) => sum + value, 0) / count;
-  const squares = differences.reduce((sum, value) => sum + (value - mean) ** 2, 0);
-  return count > 3 && mean > clearlyWorse * Math.sqrt(squares / (count - 1) / count);
 }
 
 function sentenceOf(standing: readonly string[], rows: readonly ComparisonRow[]): string {

@@ -11,8 +11,13 @@ export interface NaiveCriterion {
  *
  * "No change" carries the last value on (its only constant is sigma), "mean level" has each value scatter about one
  * level. A trajectory fit also compares its first value, which is left out here.
+ *
+ * @param from - first step index counted: 1, or more where rivals read past values and begin later.
  */
-export function naiveCriteria(fit: Fit): {
+export function naiveCriteria(
+  fit: Fit,
+  from = 1,
+): {
   readonly naive: readonly NaiveCriterion[];
   readonly own: number;
 } {
@@ -22,7 +27,7 @@ export function naiveCriteria(fit: Fit): {
   for (const group of fit.groups) {
     const recorded = fit.observations.groups.find((each) => each.name === group.group)!;
     for (const state of fit.rule.states) {
-      const points = group.points.filter((point) => point.state === state && point.index > 0);
+      const points = group.points.filter((point) => point.state === state && point.index >= from);
       const values = points.map((point) => scaled(point.observed));
       const before = points.map((point) => {
         const row = recorded.index.indexOf(point.index);

@@ -1,10 +1,9 @@
-import { type Fit, fit as fitRule, type GroupFit } from "../../estimate/index.js";
-import { ModelError } from "../../numeric/index.js";
+import type { Fit } from "../../estimate/index.js";
 import type { ObservedGroup } from "../../record/index.js";
 import { type ForecastScores, type Scored, scoresOf } from "./forecast-scores.js";
 import { type NaiveForecast, naiveForecasts } from "./naive-forecasts.js";
-import { type Prediction, predictAhead } from "./predict-ahead.js";
-import { recordUntil } from "./record-until.js";
+import type { Prediction } from "./predict-ahead.js";
+import { predictFrom } from "./predict-from.js";
 
 /** Forecasts made from several origins, each from the record up to it, and what came. */
 export interface RollingOrigin {
@@ -21,7 +20,8 @@ export interface RollingOrigin {
 
 /** How far and from where to forecast. */
 export interface OriginPlan {
-  readonly origins: number;
+  /** Rows left out behind each origin, at least 1. */
+  readonly leftOut: readonly number[];
   readonly horizon: number;
   readonly level: number;
 }
@@ -47,10 +47,10 @@ export function rollingOrigin(fits: readonly Fit[], plan: OriginPlan): RollingOr
   const naive = naiveForecasts(logs[0]!);
   const made = first.observations.groups.flatMap((group) => {
     const last = group.index.length - 1;
-    const from = Math.max(3, last - plan.origins);
-    return Array.from({ length: Math.max(0, last - from) }, (_, i) =>
-      forecastsAt(fits, naive, group, from + i, plan.horizon),
-    ).filter((forecasts) => forecasts.length > 0);
+    const origins = plan.leftOut.map((rows) => last - rows).filter((origin) => origin >= 3);
+    return origins
+      .map((origin) => forecastsAt(fits, naive, group, origin, plan.horizon))
+      .filter((forecasts) => forecasts.length > 0);
   });
   const scored = made.flat();
   if (scored.length === 0) return undefined;
@@ -75,13 +75,11 @@ function forecastsAt(
   origin: number,
   horizon: number,
 ): readonly (readonly Scored[])[] {
-  const { states } = fits[0]!.rule;
-  const rivals = fits.map((fit) => aheadOf(fit, group, origin, horizon));
+  const rivals = fits.map((fit) => predictFrom(fit, group.name, origin, horizon));
   if (rivals.some((rival) => rival === undefined)) return [];
-  return targetsOf(group, states, origin, horizon).flatMap((target) => {
-    const s = states.indexOf(target.state);
+  return targetsOf(group, fits[0]!.rule.states, origin, horizon).flatMap((target) => {
     const all = [
-      ...rivals.map((rival) => rival![target.ahead - 1]![s]),
+      ...rivals.map((rival, i) => rival![target.ahead - 1]?.[placeOf(fits[i]!, target.state)]),
       ...naive.map((each) => each.predict(target.group, target.state, target.last, target.ahead)),
     ];
     if (all.some((prediction) => prediction === undefined)) return [];
@@ -89,36 +87,9 @@ function forecastsAt(
   });
 }
 
-/** A fit's predictions from an origin; undefined where it cannot be fitted there. */
-function aheadOf(
-  fit: Fit,
-  group: ObservedGroup,
-  origin: number,
-  horizon: number,
-): readonly (readonly Prediction[])[] | undefined {
-  const periods = Math.min(horizon, group.index[group.index.length - 1]! - group.index[origin]!);
-  try {
-    const refitted = fitRule(fit.rule, recordUntil(fit.observations, group, origin), {
-      ...fit.options,
-      start: { ...startOf(fit, group.name), ...fit.options.start },
-      intervals: "none",
-    });
-    return predictAhead(refitted, refitted.groups[0]!, group, periods);
-  } catch (cause) {
-    // Too few rows yet, for instance: then this origin is passed over for all rivals.
-    if ((cause as Error).name === ModelError.name) return undefined;
-    throw cause;
-  }
-}
-
-/** The whole record's estimates only tell where to look first; the search ends at the optimum of what was known. */
-function startOf(fit: Fit, name: string): Record<string, number> {
-  const group: GroupFit | undefined = fit.groups.find((each) => each.group === name);
-  return Object.fromEntries(
-    (group?.estimates ?? [])
-      .filter((estimate) => estimate.role === "constant")
-      .map((estimate) => [estimate.name, estimate.value]),
-  );
+/** Rules of one state may name it as they like. */
+function placeOf({ rule }: Fit, state: string): number {
+  return rule.states.length === 1 ? 0 : rule.states.indexOf(state);
 }
 
 function targetsOf(

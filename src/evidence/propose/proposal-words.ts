@@ -1,0 +1,54 @@
+import type { Proposal, ProposedRule } from "./propose.js";
+import { aheadOfNaive, supportedWithin } from "./supported-rules.js";
+
+type Found = Omit<Proposal, "kind" | "sentence" | "notes">;
+
+/** What a proposal comes to, as a client would be told, and the price of having looked at many. */
+export function proposalWords(
+  found: Found,
+  tried: number,
+  heldOut: number | undefined,
+): Pick<Proposal, "sentence" | "notes"> {
+  const notes = [
+    `${tried} fits were tried. Among so many the best owes part of its lead to chance: leads below ${supportedWithin} in AICc are no evidence, and a rule must be ${aheadOfNaive} ahead of "no change" and "mean level".`,
+    ...(found.advice ? [found.advice.sentence] : []),
+    ...heldOutNote(found, heldOut),
+  ];
+  return { sentence: sentenceOf(found), notes };
+}
+
+function sentenceOf({ rows, verdict, errors }: Found): string {
+  if (verdict.kind === "none-adequate") {
+    const [closest] = rows;
+    const reason = closest === undefined ? "" : ` The closest, ${closest.name}, is ${closest.reason}.`;
+    return `None adequate: no rule of the catalogue explains the record better than a forecast without a rule.${reason}`;
+  }
+  const supported = rows.filter((row) => row.supported);
+  const open = openOf(supported);
+  const kind = errors === "undecided" ? "the record does not tell where the error lies" : placeOf(errors);
+  const told =
+    verdict.kind === "supported"
+      ? `The record supports ${verdict.rules[0]}`
+      : `The record does not tell ${verdict.rules.slice(0, -1).join(", ")} and ${verdict.rules[verdict.rules.length - 1]} apart`;
+  const next = verdict.kind === "supported" ? "Check it before it is used" : "Carry all of them forward";
+  return `${told} (${kind}).${open} ${next}.`;
+}
+
+function placeOf(errors: "process" | "observation"): string {
+  return errors === "process" ? "error in the change itself" : "error in the reading";
+}
+
+function openOf(rows: readonly ProposedRule[]): string {
+  const open = rows.filter((row) => row.undetermined.length > 0);
+  return open.map((row) => ` It does not determine ${row.undetermined.join(", ")} of ${row.name}.`).join("");
+}
+
+function heldOutNote({ rows, naiveHeldOut }: Found, values: number | undefined): string[] {
+  const scored = rows.filter((row) => row.heldOut !== undefined);
+  if (naiveHeldOut === undefined || scored.length === 0) return [];
+  const best = scored.reduce((low, next) => (next.heldOut! < low.heldOut! ? next : low));
+  const better = best.heldOut! < naiveHeldOut.score ? "better" : "no better";
+  return [
+    `Held out: fitted without the last fifth, ${best.name} forecast its ${values} values with score ${best.heldOut!.toPrecision(3)}, ${better} than "${naiveHeldOut.name}" with ${naiveHeldOut.score.toPrecision(3)} (lower is better).`,
+  ];
+}

@@ -1,0 +1,172 @@
+import type { Fit, FitOptions } from "../../estimate/index.js";
+import { fit as fitRule } from "../../estimate/index.js";
+import { randomStream } from "../../numeric/index.js";
+import type { Observations } from "../../record/index.js";
+import { type ErrorAdvice, errorAdvice } from "../check/error-advice.js";
+import { refuseNothingFits } from "../refusals.js";
+import { candidatesFor, type NotTried } from "./candidates.js";
+import { holdOut } from "./hold-out.js";
+import { oneState } from "./one-state.js";
+import { proposalWords } from "./proposal-words.js";
+import { type Standing, supportedRules } from "./supported-rules.js";
+import { type Tried, tryRules } from "./try-rules.js";
+
+/** Records drawn with each kind of error, for the advice. */
+const adviceDraws = 60;
+
+/** Options of `propose`; others are those of a fit. */
+export interface ProposeOptions extends Omit<FitOptions, "errors" | "intervals"> {
+  /** Default: the only state. */
+  readonly state?: string;
+  /** Where the error lies; without it both are tried, and the record says which, or that it cannot. */
+  readonly errors?: "process" | "observation";
+  /** Default 1. */
+  readonly seed?: number;
+}
+
+/** A rule that was tried on a record. */
+export interface ProposedRule {
+  readonly name: string;
+  readonly rule: string;
+  readonly errors: "process" | "observation";
+  readonly unknowns: number;
+  readonly aicCorrected: number;
+  /** Above the lowest with the same kind of error. */
+  readonly difference: number;
+  /** Mean ranked probability score on the last fifth, fitted to the rows before it; undefined where not computed. */
+  readonly heldOut: number | undefined;
+  readonly supported: boolean;
+  /** Constants that the record does not determine; filled for supported rules. */
+  readonly undetermined: readonly string[];
+  /** Why it is not supported; "" where it is. */
+  readonly reason: string;
+}
+
+/** The catalogue tried on a record. */
+export interface Proposal {
+  readonly kind: "proposal";
+  /** Supported rules first, then by AICc. */
+  readonly rows: readonly ProposedRule[];
+  readonly notTried: readonly NotTried[];
+  readonly errors: "process" | "observation" | "undecided";
+  readonly advice: ErrorAdvice | undefined;
+  /** Best score of a naive forecast on the last fifth. */
+  readonly naiveHeldOut: { readonly name: string; readonly score: number } | undefined;
+  readonly verdict: {
+    readonly kind: "supported" | "undecided" | "none-adequate";
+    readonly rules: readonly string[];
+  };
+  /** Fits of the supported rules, with intervals, ready for `check`, `compare` and `forecast`. */
+  readonly fits: readonly Fit[];
+  readonly sentence: string;
+  readonly notes: readonly string[];
+}
+
+/**
+ * Tries the catalogue on a record: fits every rule that one state can identify, with errors in the process and in the
+ * observation, and says which are supported, that they cannot be told apart, or that none is adequate.
+ *
+ * Having looked at many is priced in three ways: a rule must be ahead of every naive rule by 4 in AICc, leads below 4
+ * are no evidence, and a supported rule must not forecast the last fifth of the record, which it was not fitted to,
+ * clearly worse than a naive forecast.
+ *
+ * @throws {ModelError} `several-states` | `nothing-fits`.
+ * @example propose(counts).verdict.kind; // "undecided"
+ */
+export function propose(observations: Observations, options: ProposeOptions = {}): Proposal {
+  const { state, errors, seed = 1, ...others } = options;
+  const record = oneState(observations, state);
+  const positive = record.groups.every((group) =>
+    Object.values(group.values)[0]!.every((value) => value > 0),
+  );
+  const spread = others.spread ?? (positive ? "proportional" : "constant");
+  const { candidates, left } = candidatesFor(record.inputs);
+  const usable = candidates.filter((candidate) => positive || candidate.anyLevel);
+  const kinds = errors === undefined ? (["process", "observation"] as const) : [errors];
+  const settings = { ...others, spread };
+  const { tried, failed } = tryRules(usable, record, kinds, settings);
+  if (tried.length === 0) throw refuseNothingFits(failed[0]?.reason ?? "no rule suits its levels");
+  const barred = candidates.filter((candidate) => !usable.includes(candidate));
+  const notTried = [
+    ...barred.map(({ name }) => ({ name, reason: "speaks of positive levels only" })),
+    ...failed,
+    ...left,
+  ];
+  return judged({ record, settings, tried, seed, errors, notTried });
+}
+
+interface Trial {
+  readonly record: Observations;
+  readonly settings: Omit<FitOptions, "errors">;
+  readonly tried: readonly Tried[];
+  readonly notTried: readonly NotTried[];
+  readonly errors: ProposeOptions["errors"];
+  readonly seed: number;
+}
+
+function judged({ record, settings, tried, notTried, errors, seed }: Trial): Proposal {
+  const advice = errors === undefined ? adviceOn(tried, seed) : undefined;
+  const chosen = errors ?? advice?.kind ?? "undecided";
+  const kinds = chosen === "undecided" ? (["process", "observation"] as const) : [chosen];
+  const standings = kinds.flatMap((kind) => supportedRules(tried.filter((each) => each.errors === kind)));
+  const held = holdOut(standings);
+  const judgedRows = standings.map((standing, i) => rowOf(standing, held?.scores[i], held?.beatenBy[i]));
+  const rows = judgedRows
+    .sort((a, b) => Number(b.supported) - Number(a.supported) || a.difference - b.difference)
+    .map((row) => withFit(row, tried, record, settings));
+  const names = [...new Set(rows.filter(({ row }) => row.supported).map(({ row }) => row.name))];
+  const kind = names.length === 0 ? "none-adequate" : names.length === 1 ? "supported" : "undecided";
+  const result = {
+    rows: rows.map(({ row }) => row),
+    notTried,
+    errors: chosen,
+    advice,
+    naiveHeldOut: held?.naive,
+    verdict: { kind, rules: names } as const,
+    fits: rows.flatMap(({ fit }) => (fit ? [fit] : [])),
+  };
+  const words = proposalWords(result, tried.length, held?.values);
+  return Object.freeze({ kind: "proposal", ...result, ...words });
+}
+
+/** Which kind of error the record speaks for, by the rule that explains it best with either. */
+function adviceOn(tried: readonly Tried[], seed: number): ErrorAdvice | undefined {
+  const [best] = [...tried].sort((a, b) => a.aicCorrected - b.aicCorrected);
+  return best && errorAdvice(best.fit, best.fit.groups[0]!, adviceDraws, randomStream(seed));
+}
+
+function rowOf(standing: Standing, heldOut: number | undefined, beatenBy: string | undefined): ProposedRule {
+  const { tried, difference, reason } = standing;
+  const beaten = beatenBy === undefined ? reason : `forecast the last fifth clearly worse than "${beatenBy}"`;
+  return {
+    name: tried.name,
+    rule: tried.fit.rule.text,
+    errors: tried.errors,
+    unknowns: tried.unknowns,
+    aicCorrected: tried.aicCorrected,
+    difference,
+    heldOut,
+    supported: beaten === "",
+    undetermined: [],
+    reason: beaten,
+  };
+}
+
+/** A supported rule with its fit done again with intervals, which tell the constants that are not determined. */
+function withFit(
+  row: ProposedRule,
+  tried: readonly Tried[],
+  record: Observations,
+  settings: Omit<FitOptions, "errors">,
+): { readonly row: ProposedRule; readonly fit?: Fit } {
+  const { fit } = tried.find((each) => each.name === row.name && each.errors === row.errors)!;
+  if (!row.supported) return { row };
+  const bounds = fit.options.bounds ?? {};
+  const whole = fitRule(fit.rule, record, { ...settings, bounds, errors: row.errors });
+  const open = whole.groups.flatMap((group) =>
+    group.estimates
+      .filter((estimate) => estimate.standardError === undefined)
+      .map((estimate) => estimate.name),
+  );
+  return { row: { ...row, undetermined: [...new Set(open)] }, fit: whole };
+}
