@@ -21,6 +21,7 @@ export type { ClosedTerm } from "./linear/closed-terms.js";
 export type { ClosedRoot } from "./linear/polynomial-roots.js";
 export { type MatrixGrowth, matrixGrowth } from "./matrix-growth.js";
 export type { Multiplier } from "./multiplier.js";
+export { type NoiseStream, noiseCapacity, noiseStream } from "./noise/noise-stream.js";
 export { type Path, type PathOptions, type PathStop, path } from "./path.js";
 export type { SearchRange } from "./search-range.js";
 export { constantsBySlot, type InitialValues, initialVector } from "./setting.js";
