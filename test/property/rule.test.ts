@@ -57,6 +57,36 @@ test("generated code and interpreter give the same bits, values and sensitivitie
   );
 });
 
+test("many paths abreast take the same steps as each alone", () => {
+  void fc.assert(
+    fc.property(ruleSource(false), states, positive, positive, (text, start, r, K) => {
+      const rule = recurrence(text, { inputs: ["u"] });
+      const width = rule.states.length + rule.memory.length;
+      const inputs = [Float64Array.of(0.5, 1, 1.5, 2)];
+      const own = [1, 1.5, 0.5].map((k) =>
+        Float64Array.from(rule.constants, (name) => k * (name === "r" ? r : K)),
+      );
+      const states3 = own.map((_, k) => Float64Array.from(start.slice(0, width), (value) => value + 0.1 * k));
+      const flat = (rows: readonly Float64Array[]): Float64Array =>
+        Float64Array.from(rows.flatMap((row) => [...row]));
+      for (const compiled of [compileRule(rule), interpretRule(rule)]) {
+        const each = flat(states3);
+        compiled.advanceEach(each, 0, 3, flat(own), inputs, 1);
+        const shared = flat(states3);
+        compiled.advance(shared, 1, 3, own[0]!, inputs, 1);
+        const alone = (k: number, constants: Float64Array): Float64Array => {
+          const next = new Float64Array(width);
+          compileRule(rule).step(states3[k]!, constants, inputs, 1, next);
+          return next;
+        };
+        expect(each).toEqual(flat([0, 1, 2].map((k) => alone(k, own[k]!))));
+        expect(shared).toEqual(flat([states3[0]!, alone(1, own[0]!), alone(2, own[0]!)]));
+      }
+    }),
+    seeded,
+  );
+});
+
 test("sensitivities agree with differences of paths", () => {
   let compared = 0;
   void fc.assert(

@@ -1,7 +1,7 @@
-import type { Node } from "../graph/node.js";
+import type { LeafRole, Node } from "../graph/node.js";
 import { operations } from "../graph/operations.js";
 
-/** Source for a set of nodes: what can stand before the loop over periods, and what belongs inside it. */
+/** Source for a set of nodes: what can stand before a loop, and what belongs inside it. */
 export interface EmittedProgram {
   readonly before: readonly string[];
   readonly inside: readonly string[];
@@ -18,8 +18,11 @@ interface Facts {
   readonly ordered: Node[];
 }
 
-/** Counts uses, finds which nodes change from period to period, and orders arguments before what uses them. */
-function survey(roots: readonly Node[]): Facts {
+/** What stays the same from turn to turn of a loop over periods. */
+const constantsOnly: ReadonlySet<LeafRole> = new Set(["constant"]);
+
+/** Counts uses, finds which nodes change from turn to turn, and orders arguments before what uses them. */
+function survey(roots: readonly Node[], fixed: ReadonlySet<LeafRole>): Facts {
   const facts: Facts = { uses: new Map(), varies: new Map(), ordered: [] };
   const visit = (node: Node): void => {
     facts.uses.set(node, (facts.uses.get(node) ?? 0) + 1);
@@ -27,7 +30,7 @@ function survey(roots: readonly Node[]): Facts {
     if (node.kind === "inner") for (const part of node.inside) visit(part);
     const varies =
       node.kind === "leaf"
-        ? node.role !== "constant"
+        ? !fixed.has(node.role)
         : node.kind === "inner" && node.inside.some((part) => facts.varies.get(part)!);
     facts.varies.set(node, varies);
     facts.ordered.push(node);
@@ -58,10 +61,13 @@ function needsVariable(node: Node, facts: Facts, depth: number): boolean {
 
 /**
  * Writes source for the roots and everything below them. Variables are `v` and the node's id; leaves must be
- * in scope as s0, c0, u0, t.
+ * in scope as s0, c0, u0, t. `fixed` are the roles whose leaves stay the same in every turn of the loop.
  */
-export function emitProgram(roots: readonly Node[]): EmittedProgram {
-  const facts = survey(roots);
+export function emitProgram(
+  roots: readonly Node[],
+  fixed: ReadonlySet<LeafRole> = constantsOnly,
+): EmittedProgram {
+  const facts = survey(roots, fixed);
   const before: string[] = [];
   const inside: string[] = [];
   const sources = new Map<Node, string>();

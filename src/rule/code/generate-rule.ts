@@ -1,6 +1,7 @@
-import type { CompiledRule, PathSums } from "../compiled-rule.js";
+import type { Advance, CompiledRule, PathSums } from "../compiled-rule.js";
 import { modulo, roundTo } from "../graph/operations.js";
 import type { RuleGraph } from "../graph/rule-graph.js";
+import { advanceSource } from "./advance-source.js";
 import { interpretGraph } from "./interpret-graph.js";
 import { pathSource, stepSource } from "./path-source.js";
 import { sensitivitySource } from "./sensitivity-source.js";
@@ -61,9 +62,20 @@ export function generateRule(rule: RuleGraph): CompiledRule {
       ),
     ),
   ) as [() => PathSums, () => PathSums];
+  const [advance, advanceEach] = [true, false].map((shared) =>
+    late(() =>
+      makeFunction<Advance>("present, first, last, constants, inputs, t", advanceSource(rule, shared)),
+    ),
+  ) as [() => Advance, () => Advance];
   const summed = rule.states + rule.constants <= mostSummed;
   return {
     pathSums: summed ? (logarithmic) => (logarithmic ? logSums() : plainSums()) : undefined,
+    get advance() {
+      return advance();
+    },
+    get advanceEach() {
+      return advanceEach();
+    },
     get step() {
       return step();
     },

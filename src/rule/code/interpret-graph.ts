@@ -1,4 +1,4 @@
-import type { CompiledRule } from "../compiled-rule.js";
+import type { Advance, CompiledRule } from "../compiled-rule.js";
 import type { RuleGraph } from "../graph/rule-graph.js";
 import { stepDerivatives } from "../graph/step-derivatives.js";
 import { graphEvaluator, type ReadNode } from "./graph-evaluator.js";
@@ -38,7 +38,24 @@ export function interpretGraph(rule: RuleGraph): CompiledRule {
       values.set(state, i * width);
     }
   };
-  return { step, path, pathWithSensitivities: interpretSensitivities(rule), pathSums: undefined };
+  return {
+    step,
+    path,
+    advance: interpretAdvance(rule, step, true),
+    advanceEach: interpretAdvance(rule, step, false),
+    pathWithSensitivities: interpretSensitivities(rule),
+    pathSums: undefined,
+  };
+}
+
+function interpretAdvance(rule: RuleGraph, step: CompiledRule["step"], shared: boolean): Advance {
+  return (present, first, last, constants, inputs, t) => {
+    for (let path = first; path < last; path++) {
+      const state = present.subarray(path * rule.states, (path + 1) * rule.states);
+      const from = shared ? 0 : path * rule.constants;
+      step(state, constants.subarray(from, from + rule.constants), inputs, t, state);
+    }
+  };
 }
 
 function interpretSensitivities(rule: RuleGraph): CompiledRule["pathWithSensitivities"] {
