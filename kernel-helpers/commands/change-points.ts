@@ -36,7 +36,7 @@ export function changePoint(
  *
  * The seed is the case's unless one is given.
  *
- * @example densityDependence(counts).groups.length; // 2
+ * @example densityDependence(counts).groups[0].found; // true
  */
 export function densityDependence(
   observations: Observations,
@@ -94,7 +94,7 @@ function breaksFigure(looked: ChangePoint): Figure {
       {
         title: group.group === "" ? "Record" : group.group,
         x,
-        y: { title: state!.name, unit: state!.unit },
+        y: { title: state!.column, unit: state!.unit },
         layers: [
           { mark: "points", name: "recorded", x: recorded.time, y: recorded.values[state!.name]! },
           ...marks,

@@ -49,7 +49,7 @@ export interface DensityDependence {
  * @throws {ModelError} `no-density-test`.
  * @see Dennis, B. and Taper, M. L. (1994), Density dependence in time series observations of natural populations:
  *   estimation and testing, Ecological Monographs 64: the parametric bootstrap likelihood ratio test.
- * @example densityDependence(counts).groups.length; // 2
+ * @example densityDependence(counts).groups[0].found; // true
  */
 export function densityDependence(
   observations: Observations,

@@ -16,28 +16,28 @@ const truths: readonly (readonly [string, Rule, readonly number[], number])[] = 
 ];
 
 describe("propose", () => {
-  // 12 records a rule, which the seed fixes; 1,000 of each in the benchmark.
+  // 8 records a rule, which the seed fixes; 1,000 of each in the benchmark.
   test("calls the rule that made a record supported in nine of ten", () => {
     const stream = randomStream(6);
     const found = truths.flatMap(([name, rule, constants, first]) =>
-      Array.from({ length: 12 }, (_, k) => {
+      Array.from({ length: 8 }, (_, k) => {
         const errors = k % 2 === 0 ? "process" : "observation";
         const { verdict } = propose(series(drawn(rule, constants, first, 30, 0.1, errors, stream)));
         return verdict.rules.includes(name);
       }),
     );
-    expect(found.filter(Boolean).length).toBeGreaterThanOrEqual(54);
+    expect(found.filter(Boolean).length).toBeGreaterThanOrEqual(36);
   });
 
   test("says that none is adequate on pure noise in nine of ten", () => {
     const stream = randomStream(11);
     let none = 0;
-    for (let k = 0; k < 20; k++) {
+    for (let k = 0; k < 12; k++) {
       const noise = Float64Array.from({ length: 30 }, () => 100 * Math.exp(0.1 * stream.normal()));
       const proposal = propose(series(noise));
       if (proposal.verdict.kind === "none-adequate") none++;
     }
-    expect(none).toBeGreaterThanOrEqual(18);
+    expect(none).toBeGreaterThanOrEqual(11);
   });
 
   test("tells what a supported rule leaves open, and hands on its fit with intervals", () => {
@@ -77,7 +77,9 @@ describe("propose", () => {
       step: { every: 1, of: "day" },
       values: { a: "a", b: "b" },
     });
-    expect(() => propose(both)).toThrowErrorMatchingInlineSnapshot(`[ModelError: The record holds 2 states (a, b), and rules are proposed for one. Name one with { state: "a" }.]`);
+    expect(() => propose(both)).toThrowErrorMatchingInlineSnapshot(
+      `[ModelError: The record holds 2 states (a, b), and rules are proposed for one. Name one with { state: "a" }.]`,
+    );
     expect(propose(both, { state: "a", errors: "process" }).rows.length).toBeGreaterThan(0);
   });
 });

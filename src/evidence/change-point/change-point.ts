@@ -71,7 +71,7 @@ export interface ChangePoint {
  *   of Econometrics 70: its distribution in short dynamic records, by drawing them; Eo, Y. and
  *   Morley, J. (2015), Likelihood-ratio-based confidence sets for the timing of structural breaks, Quantitative Economics
  *   6: the interval.
- * @example changePoint(crowding, counts).groups[0].found; // false
+ * @example changePoint(crowding, counts, { spread: "proportional" }).groups[0].found; // false
  */
 export function changePoint(
   rule: Rule,

@@ -71,7 +71,7 @@ export interface Proposal {
  * clearly worse than a naive forecast.
  *
  * @throws {ModelError} `several-states` | `nothing-fits`.
- * @example propose(counts).verdict.kind; // "undecided"
+ * @example propose(counts, { spread: "proportional" }).verdict.kind; // "undecided"
  */
 export function propose(observations: Observations, options: ProposeOptions = {}): Proposal {
   const { state, errors, seed = 1, ...others } = options;
