@@ -1,5 +1,5 @@
 import { libraryAgain, warmPictures } from "../figures/index.js";
-import { type Bundle, escapeHtml, look, raised, showing, typeface } from "../tables/index.js";
+import { type Bundle, escapeHtml, look, raised, showing, typeface, untypeset } from "../tables/index.js";
 import { type CaseHead, caseLog, defaultSeed } from "./case-log.js";
 import { cautionOf, type Domain, domainCautions } from "./cautions.js";
 import { refuseEmptyAnswer, refuseNoCase, refuseUnanswered, refuseUnknownDomain } from "./refusals.js";
@@ -63,14 +63,16 @@ export function answer(said: string): void {
   if (caseLog.head() === undefined) throw refuseNoCase("answer(...)");
   if (sentence.trim() === "") throw refuseEmptyAnswer();
   caseLog.noteAnswer(sentence);
+  const cautions = caseLog.cautions();
   const html =
     `<p style="margin:0;color:${look.quiet};font-size:13px;font-weight:600">Answer</p>` +
-    `<p style="margin:.2em 0 0;font-size:17px">${escapeHtml(sentence)}</p>`;
+    `<p style="margin:.2em 0 0;font-size:17px">${escapeHtml(sentence)}</p>` +
+    cautions.map((text) => `<p style="margin:.4em 0 0">Caution: ${escapeHtml(text)}</p>`).join("");
   show(
     showing({ kind: "answer", sentence }, () => ({
-      "application/vnd.periodwise.answer+json": { sentence },
+      "application/vnd.periodwise.answer+json": { sentence, cautions },
       "text/html": boxed(html),
-      "text/plain": `Answer: ${sentence}`,
+      "text/plain": [`Answer: ${sentence}`, ...cautions.map((text) => `Caution: ${text}`)].join("\n"),
     })),
   );
 }
@@ -99,5 +101,5 @@ function block(html: string, text: string, more: Bundle = {}): Shown {
 
 function boxed(html: string): string {
   const style = `border-left:4px solid ${look.accent};background:${look.shade};color:${look.ink};padding:.8em 1.1em;margin:.6em 0;font-family:${typeface};line-height:1.45;max-width:60em;overflow-wrap:anywhere`;
-  return `<div class="pw-block" dir="auto" style="${style}">${html}</div>`;
+  return `<div class="${untypeset} pw-block" dir="auto" style="${style}">${html}</div>`;
 }

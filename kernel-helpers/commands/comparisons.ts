@@ -18,6 +18,9 @@ import { shownTogether } from "./shown-together.js";
 export function compare(fits: readonly Fit[], options: CompareOptions = {}): Comparison {
   const compared = compareFits(fits, options);
   caseLog.noteStep(`compared: ${compared.sentence}`);
+  const { kind, rules } = compared.verdict;
+  const others = compared.rows.map((row) => row.rule).filter((rule) => !rules.includes(rule));
+  if (kind === "supported" || kind === "undecided") caseLog.noteVerdict(rules, others);
   return showing({ ...compared }, () =>
     shownTogether([
       comparisonTable(compared),

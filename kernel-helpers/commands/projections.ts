@@ -29,6 +29,7 @@ export function forecast(fit: Fit, options: ForecastOptions): Forecast {
   caseLog.noteStep(
     `forecast "${fit.rule.text}" over ${options.periods} periods, ${ahead.options.paths} paths`,
   );
+  caseLog.noteForecast(fit.rule.text);
   return showing({ ...ahead }, () => shownTogether(showForecast(ahead)));
 }
 
