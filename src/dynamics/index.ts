@@ -9,7 +9,6 @@ export {
 export { type ClosedForm, type ClosedFormOptions, closedForm, closedFormAt } from "./closed-form.js";
 export { type Cobweb, type CobwebOptions, cobweb } from "./cobweb.js";
 export { type Cycle, type Cycles, type CyclesOptions, cycles } from "./cycles.js";
-export { type Draws, type DrawsOptions, draws } from "./draws.js";
 export { type Equilibria, type EquilibriaOptions, type Equilibrium, equilibria } from "./equilibria.js";
 export { type ExactPath, type ExactPathOptions, type ExactValue, exactPath } from "./exact/exact-path.js";
 export { type Exponent, type ExponentOptions, exponent } from "./exponent.js";

@@ -1,6 +1,7 @@
+import { type NoiseStream, noiseStream } from "../dynamics/index.js";
 import { type RandomStream, randomStream } from "../numeric/index.js";
 import type { CompiledRule } from "../rule/index.js";
-import type { NoiseDraw } from "./noise.js";
+import type { NoiseDraw, NoiseLot } from "./noise.js";
 
 /** Where every path of an ensemble begins: its constants and its state vector, one row a path. */
 export interface Starts {
@@ -59,13 +60,24 @@ export function runEnsemble(run: EnsembleRun): void {
   const present = new Float64Array(paths * width);
   for (let path = 0; path < paths; path++) present.set(rowOf(starts.initial, path, width), path * width);
   const reported = Array.from({ length: states }, () => new Float64Array(paths));
+  const scatter = scatterer(run);
   const advance = stepper(run);
   for (let t = 0; t <= periods; t++) {
     for (let block = 0; block * blockSize < paths; block++) {
       const first = block * blockSize;
       const last = Math.min(first + blockSize, paths);
-      if (t > 0) advance(present, first, last, run.from + t - 1, run.streams[block]!);
-      report(run, present, first, last, reported, run.streams[block]!);
+      if (t > 0) {
+        if (run.onStep !== undefined) tellSteps(run, present, first, last, run.from + t - 1);
+        advance(present, first, last, run.from + t - 1);
+        run.change.forEach((draw, s) => {
+          if (draw !== undefined) scatter(draw, present, first * width + s, width, last - first, block);
+        });
+        endOutside(run, present, first, last);
+      }
+      report(run, present, first, last, reported);
+      run.reading.forEach((draw, s) => {
+        if (draw !== undefined) scatter(draw, reported[s]!, first, 1, last - first, block);
+      });
       run.onProgress?.(t * paths + last, (periods + 1) * paths);
     }
     run.onRow(t, reported);
@@ -76,72 +88,111 @@ function rowOf(rows: Float64Array, path: number, width: number): Float64Array {
   return rows.length === width ? rows : rows.subarray(path * width, (path + 1) * width);
 }
 
-type Advance = (present: Float64Array, first: number, last: number, t: number, stream: RandomStream) => void;
+type Advance = (present: Float64Array, first: number, last: number, t: number) => void;
 
-/** One period of a block of paths: the rule, then its random change, then the look at the limits. */
+/** One period of a block of paths by the rule. */
 function stepper(run: EnsembleRun): Advance {
-  const { compiled, width, inputs, starts } = run;
-  const { size } = starts;
-  const shared = starts.constants.length === size;
-  const constants = starts.constants.slice(0, size);
-  const state = new Float64Array(width);
-  const changed = changer(run, state);
-  return (present, first, last, t, stream) => {
-    for (let path = first; path < last; path++) {
-      const base = path * width;
-      if (Number.isNaN(present[base]!)) continue;
-      copy(present, base, state, 0, width);
-      if (!shared) copy(starts.constants, path * size, constants, 0, size);
-      run.onStep?.(path, state, constants, t);
-      compiled.step(state, constants, inputs, t, state);
-      if (changed(stream)) copy(state, 0, present, base, width);
-      else present.fill(Number.NaN, base, base + width);
-    }
+  const { compiled, inputs, starts } = run;
+  const { size, constants } = starts;
+  const advance = constants.length === size ? compiled.advance : compiled.advanceEach;
+  return (present, first, last, t) => {
+    if (run.onStep !== undefined) tell(run, present, first, last, t);
+    advance(present, first, last, constants, inputs, t);
   };
 }
 
-/** Short copies in a plain loop: a call of `set` costs more than the few numbers that it moves. */
-function copy(from: Float64Array, at: number, to: Float64Array, place: number, count: number): void {
-  for (let i = 0; i < count; i++) to[place + i] = from[at + i]!;
-}
-
-/** Puts the random change on a state vector; false where a state then lies out of range. */
-function changer(run: EnsembleRun, state: Float64Array): (stream: RandomStream) => boolean {
-  const { change, limits, states } = run;
-  const random = change.some((draw) => draw !== undefined);
-  return (stream) => {
-    for (let s = 0; random && s < states; s++) {
-      const draw = change[s];
-      if (draw !== undefined) state[s] = draw(state[s]!, stream);
-    }
-    return within(state, states, limits);
-  };
-}
-
-function within(state: Float64Array, states: number, limits: EnsembleRun["limits"]): boolean {
-  for (let s = 0; s < states; s++) {
-    const value = state[s]!;
-    const [low, high] = limits[s]!;
-    if (!(value >= low && value <= high && Number.isFinite(value))) return false;
+/** Tells of the steps that a block of paths is about to take. */
+function tell(run: EnsembleRun, present: Float64Array, first: number, last: number, t: number): void {
+  const { starts, width } = run;
+  for (let path = first; path < last; path++) {
+    const state = present.subarray(path * width, (path + 1) * width);
+    if (!Number.isNaN(state[0]!)) run.onStep?.(path, state, rowOf(starts.constants, path, starts.size), t);
   }
-  return true;
+}
+
+/** Tells of the steps that a block is about to take; ended paths take none. */
+function tellSteps(run: EnsembleRun, present: Float64Array, first: number, last: number, t: number): void {
+  const { width, starts, onStep } = run;
+  for (let path = first; path < last; path++) {
+    const state = present.subarray(path * width, (path + 1) * width);
+    if (Number.isNaN(state[0]!)) continue;
+    onStep!(path, state, rowOf(starts.constants, path, starts.size), t);
+  }
+}
+
+/** Scatters `count` values that stand `apart` places from each other; ended ones stay as they are. */
+type Scatter = (
+  draw: NoiseDraw,
+  values: Float64Array,
+  from: number,
+  apart: number,
+  count: number,
+  block: number,
+) => void;
+
+/** Normal errors come by the lot, all others one by one. */
+function scatterer({ streams, change, reading }: EnsembleRun): Scatter {
+  const byLot = [...change, ...reading].some((draw) => draw?.lot !== undefined);
+  const lots = byLot ? streams.map((stream) => noiseStream(Math.floor(stream.uniform() * 2 ** 53))) : [];
+  return (draw, values, from, apart, count, block) => {
+    if (draw.lot === undefined) scatterEach(draw, values, from, apart, count, streams[block]!);
+    else scatterLot(draw.lot, values, from, apart, count, lots[block]!);
+  };
+}
+
+function scatterLot(
+  { kind, centre, sd }: NoiseLot,
+  values: Float64Array,
+  from: number,
+  apart: number,
+  count: number,
+  stream: NoiseStream,
+): void {
+  if (kind === "factors") {
+    const factors = stream.factors(count, centre, sd);
+    for (let i = 0, at = from; i < count; i++, at += apart) values[at]! *= factors[i]!;
+    return;
+  }
+  const normals = stream.normals(count);
+  for (let i = 0, at = from; i < count; i++, at += apart) values[at]! += sd * normals[i]!;
+}
+
+function scatterEach(
+  draw: NoiseDraw,
+  values: Float64Array,
+  from: number,
+  apart: number,
+  count: number,
+  stream: RandomStream,
+): void {
+  for (let i = 0, at = from; i < count; i++, at += apart) {
+    const value = values[at]!;
+    if (!Number.isNaN(value)) values[at] = draw(value, stream);
+  }
+}
+
+/** Ends the paths of which a state lies out of range: all their values are NaN from there on. */
+function endOutside(run: EnsembleRun, present: Float64Array, first: number, last: number): void {
+  const { width, states, limits } = run;
+  for (let s = 0; s < states; s++) {
+    const low = Math.max(limits[s]![0], -Number.MAX_VALUE);
+    const high = Math.min(limits[s]![1], Number.MAX_VALUE);
+    for (let at = first * width + s; at < last * width; at += width) {
+      const value = present[at]!;
+      if (!(value >= low && value <= high)) present.fill(Number.NaN, at - s, at - s + width);
+    }
+  }
 }
 
 function report(
-  run: EnsembleRun,
+  { width, states }: EnsembleRun,
   present: Float64Array,
   first: number,
   last: number,
   reported: readonly Float64Array[],
-  stream: RandomStream,
 ): void {
-  const { width } = run;
-  for (let s = 0; s < run.states; s++) {
+  for (let s = 0; s < states; s++) {
     const column = reported[s]!;
-    const read = run.reading[s];
-    for (let path = first; path < last; path++) {
-      const value = present[path * width + s]!;
-      column[path] = read === undefined || Number.isNaN(value) ? value : read(value, stream);
-    }
+    for (let path = first; path < last; path++) column[path] = present[path * width + s]!;
   }
 }

@@ -15,25 +15,36 @@ export type Noise =
   | { readonly kind: "negative-binomial"; readonly size: number }
   | { readonly kind: "demographic"; readonly variance: number };
 
-/** Scatters one value. */
-export type NoiseDraw = (value: number, stream: RandomStream) => number;
+/** How the normal errors of many values are made at once: as amounts sd z, or as factors exp(centre + sd z). */
+export interface NoiseLot {
+  readonly kind: "amounts" | "factors";
+  readonly centre: number;
+  readonly sd: number;
+}
+
+/** Scatters one value; a family of normal errors says how many values are scattered at once. */
+export interface NoiseDraw {
+  (value: number, stream: RandomStream): number;
+  readonly lot?: NoiseLot;
+}
+
+const normalDraw = (kind: NoiseLot["kind"], centre: number, sd: number): NoiseDraw =>
+  Object.assign(
+    kind === "amounts"
+      ? (value: number, stream: RandomStream): number => value + sd * stream.normal()
+      : (value: number, stream: RandomStream): number => value * Math.exp(centre + sd * stream.normal()),
+    { lot: { kind, centre, sd } },
+  );
 
 /** The draw of a family. */
 export function noiseDraw(noise: Noise): NoiseDraw {
   switch (noise.kind) {
-    case "additive": {
-      const { sd } = noise;
-      return (value, stream) => value + sd * stream.normal();
-    }
-    case "lognormal": {
-      const { sd } = noise;
-      const centre = -0.5 * sd * sd;
-      return (value, stream) => value * Math.exp(centre + sd * stream.normal());
-    }
-    case "log-normal-errors": {
-      const { sd } = noise;
-      return (value, stream) => value * Math.exp(sd * stream.normal());
-    }
+    case "additive":
+      return normalDraw("amounts", 0, noise.sd);
+    case "lognormal":
+      return normalDraw("factors", -0.5 * noise.sd * noise.sd, noise.sd);
+    case "log-normal-errors":
+      return normalDraw("factors", 0, noise.sd);
     case "poisson":
       return poissonDraw;
     case "negative-binomial": {
