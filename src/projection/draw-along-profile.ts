@@ -49,14 +49,18 @@ export function drawAlongProfile(fit: Fit, group: GroupFit, loose: Estimate): Co
   };
 }
 
-/** The unknown that the record leaves most open: the one whose profile rises least on an open side. */
+/**
+ * The unknown that the record leaves most open: the one whose profile was followed and rises least on an open side.
+ */
 export function loosest(group: GroupFit): Estimate | undefined {
   const rise = ({ trace, profile }: Estimate): number =>
     Math.min(
       profile.lower === undefined ? (trace[0]?.increase ?? 0) : Number.POSITIVE_INFINITY,
       profile.upper === undefined ? (trace[trace.length - 1]?.increase ?? 0) : Number.POSITIVE_INFINITY,
     );
-  const open = group.estimates.filter((estimate) => Number.isFinite(rise(estimate)));
+  const open = group.estimates.filter(
+    (estimate) => estimate.trace.length > 1 && Number.isFinite(rise(estimate)),
+  );
   return open.sort((a, b) => rise(a) - rise(b))[0];
 }
 
@@ -91,7 +95,7 @@ function rungAt(fit: Fit, group: GroupFit, loose: Estimate, place: number, value
   const held = heldFit(fit, group, loose, value);
   if (held === undefined) return undefined;
   const factor = choleskyFactor(Float64Array.from(held.covariance), held.estimates.length);
-  const rise = Math.max(0, held.sumOfSquares - group.sumOfSquares) / group.sigma ** 2;
+  const rise = riseOf(fit, group, held);
   const centre = held.estimates.map((estimate) => estimate.value);
   centre.splice(place, 0, value);
   if (factor === undefined || !Number.isFinite(rise)) return undefined;
@@ -100,6 +104,15 @@ function rungAt(fit: Fit, group: GroupFit, loose: Estimate, place: number, value
     centre: Float64Array.from(centre),
     factor,
   };
+}
+
+/** The profile's increase, in units of sigma^2 for least squares and of twice the log likelihood otherwise. */
+function riseOf({ options }: Fit, group: GroupFit, held: GroupFit): number {
+  const squares =
+    options.errors !== "both" && ["constant", "proportional"].includes(`${options.spread ?? "constant"}`);
+  return squares
+    ? Math.max(0, held.sumOfSquares - group.sumOfSquares) / group.sigma ** 2
+    : Math.max(0, 2 * (group.criteria.logLikelihood - held.criteria.logLikelihood));
 }
 
 function heldFit(fit: Fit, group: GroupFit, loose: Estimate, value: number): GroupFit | undefined {

@@ -30,7 +30,8 @@ const patience = 200;
 
 /** The draw that a group's record allows. */
 export function unknownsDraw(fit: Fit, group: GroupFit): UnknownsDraw {
-  const loose = loosest(group);
+  const together = fit.options.groups !== undefined && fit.options.groups !== "separate";
+  const loose = together ? undefined : loosest(group);
   if (loose !== undefined) {
     const draw = drawAlongProfile(fit, group, loose);
     if (draw === undefined) throw refuseUndetermined(group.group, openNames(group));

@@ -96,18 +96,8 @@ function stepper(run: EnsembleRun): Advance {
   const { size, constants } = starts;
   const advance = constants.length === size ? compiled.advance : compiled.advanceEach;
   return (present, first, last, t) => {
-    if (run.onStep !== undefined) tell(run, present, first, last, t);
     advance(present, first, last, constants, inputs, t);
   };
-}
-
-/** Tells of the steps that a block of paths is about to take. */
-function tell(run: EnsembleRun, present: Float64Array, first: number, last: number, t: number): void {
-  const { starts, width } = run;
-  for (let path = first; path < last; path++) {
-    const state = present.subarray(path * width, (path + 1) * width);
-    if (!Number.isNaN(state[0]!)) run.onStep?.(path, state, rowOf(starts.constants, path, starts.size), t);
-  }
 }
 
 /** Tells of the steps that a block is about to take; ended paths take none. */

@@ -1,4 +1,5 @@
 import { type Band, bandBuilder } from "./band.js";
+import { type Growth, growthOf } from "./growth.js";
 import { type PassageLog, passageLog, type Watch } from "./passage.js";
 
 /** What is gathered of one state while an ensemble runs. */
@@ -8,6 +9,8 @@ export interface GatheredState {
   readonly median: readonly number[];
   readonly mean: readonly number[];
   readonly standardDeviation: readonly number[];
+  /** From the first to the last row; undefined for a state that is not positive throughout. */
+  readonly growth: Growth | undefined;
   /** [paths, periods + 1], row-major; absent where paths are not kept. */
   readonly paths: Float64Array | undefined;
 }
@@ -42,6 +45,8 @@ export function gatherer(options: GatherOptions): Gatherer {
     mean: [] as number[],
     standardDeviation: [] as number[],
     paths: keep ? new Float64Array(paths * rows) : undefined,
+    first: new Float64Array(paths),
+    growth: undefined as Growth | undefined,
   }));
   const logs = options.watches.map((watch): PassageLog => passageLog(paths, watch.value, watch.direction));
   const ended: number[] = [];
@@ -60,6 +65,7 @@ export function gatherer(options: GatherOptions): Gatherer {
         const kept = state.paths;
         if (kept !== undefined)
           for (let path = 0; path < paths; path++) kept[path * rows + t] = column[path]!;
+        noteGrowth(state, t, periods, column);
         const { mean, standardDeviation } = momentsOf(column);
         state.mean.push(mean);
         state.standardDeviation.push(standardDeviation);
@@ -68,6 +74,16 @@ export function gatherer(options: GatherOptions): Gatherer {
       });
     },
   };
+}
+
+function noteGrowth(
+  state: { readonly first: Float64Array; growth: Growth | undefined },
+  t: number,
+  periods: number,
+  column: Float64Array,
+): void {
+  if (t === 0) state.first.set(column);
+  if (t === periods) state.growth = growthOf(state.first, column, periods);
 }
 
 function endedOf(values: Float64Array): number {

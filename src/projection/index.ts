@@ -6,6 +6,7 @@ export { type FitGround, fitGround } from "./fit-ground.js";
 export { fittedNoise } from "./fitted-noise.js";
 export { type Forecast, forecast } from "./forecast.js";
 export type { ForecastOptions } from "./forecast-options.js";
+export type { Growth } from "./growth.js";
 export type { InputPlan, InputPlans } from "./input-plan.js";
 export { type Noise, type NoiseDraw, noiseDraw } from "./noise.js";
 export { type Direction, type Passage, passageLog, type Watch } from "./passage.js";

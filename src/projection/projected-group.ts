@@ -1,5 +1,6 @@
 import type { Warning } from "../numeric/index.js";
 import type { Band } from "./band.js";
+import type { Growth } from "./growth.js";
 import type { InputPlans } from "./input-plan.js";
 import type { Passage } from "./passage.js";
 import type { PathDraws } from "./path-draws.js";
@@ -14,6 +15,8 @@ export interface ProjectedState {
   /** The middle of the drawn paths that carry every error. */
   readonly median: readonly number[];
   readonly bands: readonly Band[];
+  /** Of a simulation under random change: how a typical path grows. */
+  readonly growth?: Growth;
 }
 
 /** One group of a record, or one scenario of inputs, carried forward. */

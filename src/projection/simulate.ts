@@ -5,6 +5,7 @@ import { centralPath, type Ground, stateLimits } from "./central-path.js";
 import { checkRun, keepLimit } from "./check-run.js";
 import { blockStreams, runEnsemble } from "./ensemble.js";
 import { gatherer } from "./gather.js";
+import { growthWarnings } from "./growth-warnings.js";
 import type { InputPlans } from "./input-plan.js";
 import { type Noise, noiseDraw } from "./noise.js";
 import type { Watch } from "./passage.js";
@@ -157,6 +158,7 @@ function simulated(
       central: central.values[s]!,
       median: states[s]!.median,
       bands: states[s]!.bands,
+      ...(states[s]!.growth && { growth: states[s]!.growth }),
     })),
     draws: {
       paths,
@@ -168,6 +170,9 @@ function simulated(
     passages: passagesOf(watches, found.passages),
     left,
     leftError: Math.sqrt((left * (1 - left)) / paths),
-    warnings: rangeWarnings(central, options.startsAt ?? 0, left, paths),
+    warnings: [
+      ...rangeWarnings(central, options.startsAt ?? 0, left, paths),
+      ...growthWarnings(rule, found.states(), options.period ?? "period"),
+    ],
   };
 }

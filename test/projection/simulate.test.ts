@@ -57,6 +57,14 @@ test("a lognormal multiplier of mean 1 grows by E ln R, not by ln E R", () => {
   const mean = logs.reduce((sum, value) => sum + value, 0) / paths / periods;
   const error = (sd * Math.sqrt(periods)) / periods / Math.sqrt(paths);
   expect(Math.abs(mean - (Math.log(R) - sd ** 2 / 2))).toBeLessThan(4.5 * error);
+  const growth = found.groups[0]!.states[0]!.growth!;
+  expect(growth.rate).toBeCloseTo(mean, 10);
+  expect(growth.error).toBeCloseTo(error, 4);
+  // The mean of x_T has relative standard deviation sqrt(exp(T sd^2) - 1) = 2.9: its log over 25 periods errs by .0008.
+  expect(Math.abs(growth.ofMean - Math.log(R))).toBeLessThan(4.5 * 0.0009);
+  expect(found.groups[0]!.warnings[0]!.message).toMatch(
+    /^x grows by -2\.\d\d% a period along a typical path \(E ln R, Monte-Carlo error 0\.0\d%\), and by \d\.\d\d% in the mean, which few lucky paths carry: read the median\.$/,
+  );
   const median = found.groups[0]!.states[0]!.median[periods]!;
   expect(Math.abs(Math.log(median) / periods - (Math.log(R) - sd ** 2 / 2))).toBeLessThan(6 * error);
 });
