@@ -138,13 +138,13 @@ export const designs: readonly Design[] = [
     options: both,
   },
   {
-    name: "state-space, wandering level, 60 readings",
+    name: "state-space, wandering level, 100 readings",
     rule: recurrence("x[t+1] = x + drift"),
     truth: { drift: 0.5 },
     initial: 50,
-    periods: 59,
+    periods: 99,
     process: 1,
-    reading: 2,
+    reading: 1,
     options: { errors: "both" },
   },
   {
