@@ -41,10 +41,15 @@ export type {
   PathOptions,
 } from "../src/dynamics/index.js";
 export {
+  type Bootstrap,
+  type BootstrapOptions,
   type Estimate,
+  type EstimateChange,
+  type Extended,
   estimates,
   type Fit,
   type FitOptions,
+  type GridIntervalOptions,
   type GroupFit,
   type Interval,
   points,
@@ -112,6 +117,7 @@ export {
   readRecord,
   writeRecord,
 } from "./commands/records.js";
+export { bootstrap, extend, gridInterval } from "./commands/resampling.js";
 export {
   type RecurrenceOptions,
   type Rule,

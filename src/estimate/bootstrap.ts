@@ -25,7 +25,7 @@ export interface BootstrapOptions {
   /** Default that of the fit. */
   readonly level?: number;
   /** Told after every hundredth refit; a false answer stops the work, and what was drawn so far is used. */
-  readonly progress?: (done: number, of: number) => boolean;
+  readonly onProgress?: (done: number, of: number) => unknown;
 }
 
 /** How the estimates of one unknown scattered over the refits. */
@@ -86,7 +86,7 @@ function refitsOf(
   const workspace = squaresWorkspace(system.size);
   const found: Float64Array[] = [];
   for (let k = 0; k < options.draws; k++) {
-    if (k % 100 === 0 && options.progress?.(k, options.draws) === false) break;
+    if (k % 100 === 0 && options.onProgress?.(k, options.draws) === false) break;
     rows.take(make(at, draw(stream)));
     const { estimates, stop } = minimiseSquares(system, at, {
       lower: unknowns.lower,

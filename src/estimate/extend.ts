@@ -35,7 +35,10 @@ const notable = 2;
  *
  * @param later - rows after those of the fit, read with the same options; groups are matched by name.
  * @throws {ModelError} `no-new-rows` | `rows-overlap` | `unknown-name` (a group that the fit does not have), and those of `fit`.
- * @example extend(crowdingFit, counts); // throws rows-overlap: these rows are already in the fit
+ * @example
+ * const hourly = { period: "hour", step: { every: 1, of: "hour" }, value: "N" };
+ * const early = fit(crowding, observations({ hour: [0, 1, 2, 3, 4, 5, 6], N: [10, 18, 31, 50, 69, 85, 93] }, hourly), { errors: "observation" });
+ * extend(early, observations({ hour: [7, 8], N: [96, 99] }, hourly)).added[""]; // 2
  */
 export function extend(before: Fit, later: Observations): Extended {
   const more = matchStates(before.rule, later);

@@ -1,5 +1,6 @@
 import { levenbergMarquardt } from "ml-levenberg-marquardt";
 import type { Fit } from "./fit.js";
+import { bySquares } from "./fit-options.js";
 import type { GroupFit } from "./group-fit.js";
 import { prepared } from "./prepared.js";
 import { unknownsOf } from "./unknowns.js";
@@ -18,6 +19,7 @@ export interface SecondOpinion {
  * Unknowns are scaled to 1 and `errorTolerance` is 0, without which that solver stops early on records in small units.
  */
 export function secondOpinion(fit: Fit, group: GroupFit): SecondOpinion {
+  if (!isOneLeastSquares(fit, group)) return { digits: undefined, sentence: notLeastSquares };
   const recorded = fit.observations.groups.find((each) => each.name === group.group)!;
   const unknowns = unknownsOf(fit.rule, fit.options);
   const { rows } = prepared(fit.rule, recorded, unknowns, fit.options);
@@ -52,6 +54,13 @@ export function secondOpinion(fit: Fit, group: GroupFit): SecondOpinion {
   } catch (cause) {
     return { digits: undefined, sentence: `The second solver gave no answer (${(cause as Error).message}).` };
   }
+}
+
+const notLeastSquares = "No second solver: the fit is not one of least squares of a group on its own.";
+
+function isOneLeastSquares({ options }: Fit, { estimates }: GroupFit): boolean {
+  const alone = (options.groups ?? "separate") === "separate";
+  return alone && bySquares(options) && estimates.every(({ role }) => role !== "spread");
 }
 
 function opinionOf(ours: readonly number[], theirs: readonly number[]): SecondOpinion {

@@ -1,7 +1,7 @@
 import { minimiseSquares } from "../numeric/index.js";
 import type { ObservedGroup } from "../record/index.js";
-import type { Rule } from "../rule/index.js";
-import type { FitOptions } from "./fit-options.js";
+import { linearInConstants, type Rule } from "../rule/index.js";
+import { type FitOptions, onLogScale } from "./fit-options.js";
 import type { FitRows } from "./fit-rows.js";
 import { sumOfSquaresAt } from "./normal-equations.js";
 import { type Prepared, prepared } from "./prepared.js";
@@ -52,7 +52,13 @@ function candidates(
   const stepOptions = { ...options, errors: "process" as const };
   const stepUnknowns = unknownsOf(rule, stepOptions);
   const step = options.errors === "process" ? whole : prepared(rule, group, stepUnknowns, stepOptions);
-  const trials = trialPoints(rule, group, options, stepUnknowns, most);
+  const trials = trialPoints(
+    rule,
+    group,
+    options,
+    stepUnknowns,
+    hasOneOptimum(rule, group, options, stepUnknowns) ? 1 : most,
+  );
   const best = ranked(trials, step.rows, kept);
   const better = polished(best, step, stepUnknowns);
   if (options.errors === "process") return better.map((point) => point.at);
@@ -65,6 +71,22 @@ function candidates(
     kept - 3,
   );
   return sorted([...stepped, ...direct]).map((point) => point.at);
+}
+
+/** Whether the one-step fit is solved from anywhere: linear in its constants, without gaps, logarithms or bounds. */
+function hasOneOptimum(
+  rule: Rule,
+  group: ObservedGroup,
+  options: FitOptions,
+  { names, lower, upper }: Unknowns,
+): boolean {
+  const unbroken = group.index[group.index.length - 1] === group.index.length - 1;
+  const open =
+    lower.every((low) => low === Number.NEGATIVE_INFINITY) &&
+    upper.every((high) => high === Number.POSITIVE_INFINITY);
+  return (
+    options.errors === "process" && !onLogScale(options) && open && unbroken && linearInConstants(rule, names)
+  );
 }
 
 /** The best of several points; of points with the same sum only one. */

@@ -28,7 +28,7 @@ describe("bootstrap", () => {
   test("repeats its digits for a seed, and stops when asked to", () => {
     const once = bootstrap(fitted, { draws: 200, seed: 9 });
     expect(bootstrap(fitted, { draws: 200, seed: 9 }).rows).toEqual(once.rows);
-    const stopped = bootstrap(fitted, { draws: 900, progress: (done) => done < 300 });
+    const stopped = bootstrap(fitted, { draws: 900, onProgress: (done) => done < 300 });
     expect(stopped.used).toBe(300);
   });
 
