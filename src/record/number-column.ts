@@ -47,8 +47,9 @@ function numberOf(cell: unknown, row: number, name: string): number {
 
 function refuseInfinite(values: Float64Array, name: string): Float64Array {
   for (let i = 0; i < values.length; i++) {
-    if (Math.abs(values[i]!) === Number.POSITIVE_INFINITY)
-      throw notANumber(i + 1, name, values[i], remedyFor(values[i]));
+    const value = values[i]!;
+    if (value === Number.POSITIVE_INFINITY || value === Number.NEGATIVE_INFINITY)
+      throw notANumber(i + 1, name, value, remedyFor(value));
   }
   return values;
 }

@@ -1,8 +1,8 @@
 import type { DuckDBVector } from "@duckdb/node-api";
 
-/** Bytes of a text that stand in its own cell of the engine's vector, and of the cell. */
+/** Bytes of a text that stand in its own cell of the engine's vector, behind its length; and words of a cell. */
 const inlineBytes = 12;
-const cellBytes = 16;
+const cellWords = 4;
 
 /**
  * Adds the texts of one vector of the engine to a list; null where there is none.
@@ -17,21 +17,28 @@ export function addTexts(vector: DuckDBVector, rows: number, texts: (string | nu
     dataView?: DataView;
     validity?: { data?: BigUint64Array | null };
   };
-  if (dataView === undefined || validity === undefined || !allPresent(validity.data, rows))
+  if (
+    dataView === undefined ||
+    dataView.byteOffset % 4 !== 0 ||
+    validity === undefined ||
+    !allPresent(validity.data, rows)
+  )
     addOneByOne(vector, rows, texts);
   else addPlain(vector, dataView, rows, texts);
 }
 
 function addPlain(vector: DuckDBVector, view: DataView, rows: number, texts: (string | null)[]): void {
   const bytes = Buffer.from(view.buffer, view.byteOffset, view.byteLength);
+  const words = new Int32Array(view.buffer, view.byteOffset, rows * cellWords);
   let before = -1;
   for (let row = 0; row < rows; row++) {
-    const at = row * cellBytes;
-    if (before >= 0 && sameCell(view, at, before)) texts.push(texts[texts.length - 1]!);
+    const at = row * cellWords;
+    if (before >= 0 && sameCell(words, at, before)) texts.push(texts[texts.length - 1]!);
     else {
-      const length = view.getUint32(at, true);
-      const plain = length <= inlineBytes && isPlain(view, at);
-      texts.push(plain ? bytes.toString("latin1", at + 4, at + 4 + length) : (vector.getItem(row) as string));
+      const length = words[at]!;
+      const plain = length <= inlineBytes && isPlain(words, at);
+      const start = at * 4 + 4;
+      texts.push(plain ? bytes.toString("latin1", start, start + length) : (vector.getItem(row) as string));
       before = plain ? at : -1;
     }
   }
@@ -48,19 +55,18 @@ function allPresent(mask: BigUint64Array | null | undefined, rows: number): bool
   );
 }
 
-function sameCell(view: DataView, a: number, b: number): boolean {
+function sameCell(words: Int32Array, a: number, b: number): boolean {
   return (
-    view.getInt32(a, true) === view.getInt32(b, true) &&
-    view.getInt32(a + 4, true) === view.getInt32(b + 4, true) &&
-    view.getInt32(a + 8, true) === view.getInt32(b + 8, true) &&
-    view.getInt32(a + 12, true) === view.getInt32(b + 12, true)
+    words[a] === words[b] &&
+    words[a + 1] === words[b + 1] &&
+    words[a + 2] === words[b + 2] &&
+    words[a + 3] === words[b + 3]
   );
 }
 
 /** No byte above 127: such bytes are the same text in every encoding met here. */
-function isPlain(view: DataView, at: number): boolean {
-  const all = view.getInt32(at + 4, true) | view.getInt32(at + 8, true) | view.getInt32(at + 12, true);
-  return (all & 0x80808080) === 0;
+function isPlain(words: Int32Array, at: number): boolean {
+  return ((words[at + 1]! | words[at + 2]! | words[at + 3]!) & 0x80808080) === 0;
 }
 
 function addOneByOne(vector: DuckDBVector, rows: number, texts: (string | null)[]): void {

@@ -15,7 +15,8 @@ export function checkValues(series: Omit<CheckedSeries, "logarithms">): void {
   const { values, measured } = series;
   if (values.length < 2) return;
   const logarithms = measured === "level" ? logarithmsOf(values) : undefined;
-  for (const check of checks) check({ ...series, logarithms });
+  const checked = { ...series, logarithms };
+  for (const check of checks) check(checked);
 }
 
 function logarithmsOf(values: Float64Array): Float64Array | undefined {

@@ -61,8 +61,7 @@ function holdsDates(column: Column): boolean {
 
 function axisOfNumbers(column: Column, name: string, calendar: Calendar): PeriodAxis {
   const { values } = numberColumn(column, name);
-  const empty = values.findIndex(Number.isNaN);
-  if (empty >= 0) throw noPeriod(empty + 1, name);
+  for (let row = 0; row < values.length; row++) if (Number.isNaN(values[row])) throw noPeriod(row + 1, name);
   const position = calendar.step.every === 1 ? values : values.map((value) => value / calendar.step.every);
   const written = (row: number): string => String(column[row]);
   return { column: name, calendar, position, time: values, moments: undefined, written, isDated: false };

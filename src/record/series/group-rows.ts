@@ -16,13 +16,14 @@ export function groupRows(
 ): readonly RowGroup[] {
   if (by.length === 0) return [{ name: "", rows: taken }];
   const columns = by.map((name) => columnNamed(table, name, "a column that tells series apart"));
+  const only = columns.length === 1 ? columns[0]! : undefined;
   const numbers = new Map<unknown, number>();
   const groupOf = new Int32Array(taken.length);
   let lastKey: unknown;
   let lastGroup = 0;
   for (let i = 0; i < taken.length; i++) {
     const row = taken[i]!;
-    const key = columns.length === 1 ? columns[0]![row] : keyOf(columns, row);
+    const key = only === undefined ? keyOf(columns, row) : only[row];
     if (key !== lastKey || i === 0) lastGroup = numberOf(key, numbers);
     if (lastGroup < 0) noteNameless(by, row, log);
     groupOf[i] = lastGroup;
