@@ -101,5 +101,5 @@ function block(html: string, text: string, more: Bundle = {}): Shown {
 
 function boxed(html: string): string {
   const style = `border-left:4px solid ${look.accent};background:${look.shade};color:${look.ink};padding:.8em 1.1em;margin:.6em 0;font-family:${typeface};line-height:1.45;max-width:60em;overflow-wrap:anywhere`;
-  return `<div class="${untypeset} pw-block" dir="auto" style="${style}">${html}</div>`;
+  return `<div class="pw-block ${untypeset}" dir="auto" style="${style}">${html}</div>`;
 }

@@ -1,11 +1,20 @@
 import { createHash } from "node:crypto";
-import { escapeHtml, look, oneLine, raised, type Table, tableHtml, typeface } from "../tables/index.js";
+import {
+  escapeHtml,
+  look,
+  oneLine,
+  raised,
+  type Table,
+  tableHtml,
+  typeface,
+  untypeset,
+} from "../tables/index.js";
 import type { Figure } from "./figure.js";
 import { figureAccount } from "./figure-account.js";
 import { plotSpec } from "./plot-spec.js";
 
 /** Width for which a plot is laid out on a wide and on a narrow screen, in pixels. */
-export const widths: { readonly wide: number; readonly narrow: number } = { wide: 760, narrow: 340 };
+export const widths: { readonly wide: number; readonly narrow: number } = { wide: 760, narrow: 240 };
 
 /** What a figure's HTML is put together from. */
 export interface FigureParts {
@@ -33,7 +42,7 @@ export function figureHtml({ figure, numbers, notes, picture, library }: FigureP
   // By what it draws: the same figure shown twice is drawn twice, each time in the next box that waits for it.
   const name = createHash("sha256").update(plot).digest("hex").slice(0, 16);
   return [
-    `<div class="pw-figure${picture ? " pw-pictured" : ""} pw-${name}">${figureStyle}`,
+    `<div class="pw-figure pw-${name}${picture ? " pw-pictured" : ""} ${untypeset}">${figureStyle}`,
     `<div class="pw-title" dir="auto">${picture ? "" : title}</div>`,
     `<div class="pw-live" role="img" aria-label="${title}. ${account}"></div>${image}`,
     shownNotes === "" ? "" : `<div class="pw-notes">${shownNotes}</div>`,
@@ -65,7 +74,7 @@ if(!box)return;
 box.classList.add("pw-drawn");
 var live=box.querySelector(".pw-live");
 function shape(){return live.clientWidth<560?"narrow":"wide"}
-function layout(){var l=JSON.parse(JSON.stringify(s[shape()]));l.dragmode=shape()==="narrow"?false:"zoom";l.width=Math.max(260,Math.min(live.clientWidth||760,1000));return l}
+function layout(){var l=JSON.parse(JSON.stringify(s[shape()]));l.dragmode=shape()==="narrow"?false:"zoom";l.width=Math.max(220,Math.min(live.clientWidth||760,1000));return l}
 function draw(plot){
 box.classList.add("pw-shown");
 box.querySelector(".pw-title").textContent=s.title;

@@ -79,7 +79,7 @@ function axisLook(axis: Axis, columns: number, still: boolean): object {
   return {
     ...(still
       ? {}
-      : { title: { text: plotText(axisTitle(axis), columns), standoff: 8, font: { size: 13 } } }),
+      : { title: { text: plotText(axisTitle(axis), columns, 3), standoff: 8, font: { size: 13 } } }),
     type,
     ...(ends ? { range: ends } : {}),
     ...(type === "category" ? { autorange: "reversed" } : {}),

@@ -16,7 +16,7 @@ export function plotTraces(panel: Panel, at: number): PlotTrace[] {
     const style = seriesStyle(layer.style ?? turn);
     const trace = layerTrace(layer, style);
     if (trace === undefined) return [];
-    return [{ ...trace, ...axes, name: plotText(layer.name, 28, 2), showlegend: layer.inLegend !== false }];
+    return [{ ...trace, ...axes, name: plotText(layer.name, 24, 2), showlegend: layer.inLegend !== false }];
   });
 }
 

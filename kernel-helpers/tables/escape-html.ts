@@ -13,10 +13,11 @@ const acting = /(?![\t\n])\p{Cc}|[\u202a-\u202e\u2066-\u2069]/gu;
 /**
  * Text as HTML that shows exactly that text, in an element or an attribute.
  *
- * The dollar sign is escaped too, because a notebook's page typesets what stands between two of them.
- *
  * @example escapeHtml("<b>"); // "&lt;b&gt;"
  */
 export function escapeHtml(text: string): string {
-  return text.replace(acting, " ").replace(/[&<>"'$]/g, (sign) => entities[sign] ?? sign);
+  return text.replace(acting, " ").replace(/[&<>"']/g, (sign) => entities[sign] ?? sign);
 }
+
+/** Classes of a box in which a notebook's page leaves dollar signs alone, instead of typesetting what they enclose. */
+export const untypeset = "tex2jax_ignore mathjax_ignore";

@@ -1,5 +1,5 @@
 export { significant } from "./cell-text.js";
-export { escapeHtml } from "./escape-html.js";
+export { escapeHtml, untypeset } from "./escape-html.js";
 export { look, typeface } from "./look.js";
 export { type NumberFormat, numberFormat, written } from "./number-format.js";
 export { oneLine } from "./plain-text.js";

@@ -1,4 +1,4 @@
-import { escapeHtml } from "./escape-html.js";
+import { escapeHtml, untypeset } from "./escape-html.js";
 import { type Cell, laidOut } from "./laid-out.js";
 import { look, typeface } from "./look.js";
 import { raised } from "./raised.js";
@@ -23,7 +23,7 @@ export function tableHtml(table: Table): string {
     .map(({ mark, text }) => `<p dir="auto">${mark === "" ? "" : `<b>${mark}</b> `}${escapeHtml(text)}</p>`)
     .join("");
   return [
-    `<div class="pw-table">${tableStyle}<p class="pw-title" dir="auto">${escapeHtml(raised(table.title))}</p>`,
+    `<div class="pw-table ${untypeset}">${tableStyle}<p class="pw-title" dir="auto">${escapeHtml(raised(table.title))}</p>`,
     `<div class="pw-scroll"><table aria-label="${escapeHtml(raised(table.title))}">`,
     `<thead>${head}</thead><tbody>${rows.join("")}</tbody>${foot === "" ? "" : `<tfoot>${foot}</tfoot>`}`,
     `</table></div>${notes === "" ? "" : `<div class="pw-notes">${notes}</div>`}${copyButton(table)}</div>`,
