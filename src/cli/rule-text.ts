@@ -6,17 +6,19 @@ import {
   recurrence,
   ruleLanguage,
 } from "../rule/index.js";
+import { catalogueTexts } from "./catalogue-texts.js";
 import { wordAt } from "./word-at.js";
 
-/** Help inside the text of `recurrence("...")`: its own names, the functions and words of rules, mistakes. */
+/** Help inside the text of `recurrence("...")`: its own names, functions and words, rules of the catalogue, mistakes. */
 export const ruleText: StringLanguage = {
   matches: (callee, argument) => argument === 0 && /(^|\.)recurrence$/.test(callee),
   complete: (text, position) => {
+    if (/^\s*[a-z]*$/i.test(text)) return wholeRules(text);
     const word = wordAt(text, position);
     const offered = offers(text, word.text).filter((one) => one.text.startsWith(word.before));
     return { start: word.start, end: word.end, items: offered };
   },
-  inspect: (text, position) => about(wordAt(text, position).text, languageOf(text)),
+  inspect: (text, position) => about(wordAt(text, position).text, languageOf(text)) ?? aboutWhole(text),
   check: (text, [given]) => {
     const options = declared(given);
     if (options === undefined) return [];
@@ -24,6 +26,19 @@ export const ruleText: StringLanguage = {
     return failed instanceof Error ? [complaint(failed, text)] : [];
   },
 };
+
+/** A text that is empty, or one word, may become a rule of the catalogue. */
+function wholeRules(text: string): ReturnType<StringLanguage["complete"]> {
+  const begun = text.trim().toLowerCase();
+  const fitting = catalogueTexts().filter(({ name }) => name.toLowerCase().startsWith(begun));
+  const items = fitting.map((one) => ({ text: one.text, kind: `rule ${one.name}` }));
+  return { start: 0, end: text.length, items };
+}
+
+function aboutWhole(text: string): string | undefined {
+  const rule = catalogueTexts().find((one) => one.text === text.trim());
+  return rule && `**${rule.title}** (\`rules.${rule.name}()\`)\n\n${rule.remarks}`;
+}
 
 /** The options that decide what a name is; `undefined` when the cell computes them. */
 function declared(given: unknown): RecurrenceOptions | undefined {

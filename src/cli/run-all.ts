@@ -4,8 +4,9 @@ import { type NotebookRun, type RunOptions, runNotebook } from "../casework/inde
 /** Runs notebooks one after the other, a line of outcome each. @returns the exit status: 1 when one failed. */
 export async function runAll(paths: readonly string[], options: RunOptions): Promise<number> {
   let status = 0;
-  for (const path of paths) {
-    const run = await attempt(path, options);
+  for (const [index, path] of paths.entries()) {
+    const place = paths.length > 1 ? `${index + 1} of ${paths.length}, ` : "";
+    const run = await attempt(path, { ...options, onCell: progress(`${place}${basename(path)}`) });
     if (run.kind === "completed") console.log(completedLine(run));
     else {
       console.error(run.text);
@@ -21,7 +22,7 @@ type Attempt =
 
 async function attempt(path: string, options: RunOptions): Promise<Attempt> {
   try {
-    const run = await runNotebook(path, { ...options, onCell: progress(path) });
+    const run = await runNotebook(path, options);
     clearProgress();
     return run.kind === "completed" ? run : { kind: "failed", text: failureText(run) };
   } catch (cause) {
@@ -52,9 +53,9 @@ function plain(text: string): string {
   return text.split("\u001b").reduce((done, part) => done + part.replace(/^\[[0-9;]*m/, ""));
 }
 
-function progress(path: string): (cell: number, of: number) => void {
+function progress(label: string): (cell: number, of: number) => void {
   return (cell, of) => {
-    if (process.stderr.isTTY) process.stderr.write(`\r\u001b[K${basename(path)}: cell ${cell} of ${of}`);
+    if (process.stderr.isTTY) process.stderr.write(`\r\u001b[K${label}: cell ${cell} of ${of}`);
   };
 }
 

@@ -66,6 +66,14 @@ describe("completion", () => {
     expect(one.cursor_end - one.cursor_start).toBe(3);
   });
 
+  test("in an empty rule offers the rules of the catalogue, as texts", async () => {
+    expect((await complete('recurrence("|")')).matches.length).toBeGreaterThan(5);
+    const { matches, kindOf } = await complete('recurrence("logi|")');
+    expect(matches).toHaveLength(1);
+    expect(kindOf(matches[0] ?? "")).toBe("rule logistic");
+    expect((await kernel.run(`recurrence("${matches[0]}").states.length`)).value).toBe("1");
+  });
+
   test("inside explain offers the terms of the trade", async () => {
     expect((await complete('explain("fill|")')).matches).toEqual(["fill rate"]);
   });
@@ -75,7 +83,8 @@ describe("inspection", () => {
   test("shows the type and the docstring of our own functions as Markdown", async () => {
     const told = await about("recurr|ence");
     expect(told).toMatch(/^```typescript\n.*function recurrence\(text: string/s);
-    expect(told).toContain("*param* `text`".replaceAll("`", ""));
+    expect(told).toContain("Reads a rule of change from text");
+    expect(await about("expl|ain")).toContain("*param* name");
   });
 
   test("at the higher level adds what it throws and an example", async () => {

@@ -89,6 +89,25 @@ describe("a traceback", () => {
     );
   });
 
+  test("of a type error says what could stand there instead", async () => {
+    await kernel.run(
+      'type Plan = "level" | "falling";\ninterface Terms { plan: Plan; rate?: number; months?: number }\n' +
+        "function due(owed: number, terms: Terms): number { return owed * (terms.rate ?? 1); }",
+    );
+    expect(await traceback('due(1, { plan: "rising" })')).toContain('It can be "level", "falling".');
+    expect(await traceback('due(1, { plan: "level", month: 3 })')).toContain(
+      'The fields there are months, plan: "level" | "falling", rate.',
+    );
+    expect(await traceback("due(1)")).toContain(
+      'The argument "terms" is missing: Terms, which must have plan: "level" | "falling".',
+    );
+  });
+
+  test("of an error that carries its facts leaves its cause out", async () => {
+    const code = 'throw Object.assign(new Error("said", { cause: new Error("inner") }), { facts: {} });';
+    expect(await traceback(code)).not.toContain("because of");
+  });
+
   test("is there for whatever is thrown", async () => {
     for (const thrown of [
       "'text'",

@@ -10,6 +10,7 @@ import { exportedText } from "./exported-text.js";
 import type { OwnPackage } from "./installation.js";
 import { isInLanguageLibrary, languageLibrary, languageLibraryName } from "./language-library.js";
 import { type SecondStage, secondStage } from "./second-stage.js";
+import { withHints } from "./type-hints.js";
 import { type WatchedFiles, watchedFiles } from "./watched-files.js";
 
 /** The compiler as the cell converter gets it, and the doors to what we changed about it. */
@@ -76,6 +77,11 @@ export function cellTypescript(folder: string, packages: readonly OwnPackage[]):
       return host;
     },
     transpileModule: stage.transpile,
+    // The converter's compiler has this function beyond those it declares.
+    getPreEmitDiagnosticsOfFiles: (program: ts.Program, given: readonly ts.SourceFile[]) => {
+      const complain = Reflect.get(library, "getPreEmitDiagnosticsOfFiles") as PreEmitDiagnostics;
+      return withHints(library, program, complain(program, given));
+    },
   };
   // The converter finds this module where it looks for the compiler.
   const load = createRequire(__filename);
@@ -102,6 +108,8 @@ export function cellTypescript(folder: string, packages: readonly OwnPackage[]):
     keep,
   };
 }
+
+type PreEmitDiagnostics = (program: ts.Program, files: readonly ts.SourceFile[]) => readonly ts.Diagnostic[];
 
 /** Files that the compiler reads and that are nowhere on disk. */
 interface VirtualTexts {

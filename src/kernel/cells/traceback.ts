@@ -3,7 +3,7 @@ import { inspect } from "node:util";
 import { CellError, type Complaint } from "./cell-error.js";
 import { placeText } from "./place-text.js";
 import type { SourceRegister } from "./source-register.js";
-import { stackPlaces } from "./stack-places.js";
+import { type StackPlace, stackPlaces } from "./stack-places.js";
 
 /** An error as the protocol carries it. */
 export interface ErrorReport {
@@ -52,11 +52,17 @@ function complaintText(
 
 function thrownReport(cause: unknown, sources: SourceRegister): ErrorReport {
   const { ename, evalue } = named(cause);
-  const places = stackPlaces(cause, sources).slice(0, shownPlaces);
+  const all = stackPlaces(cause, sources);
+  // A call inside an expression adds a step on the same line, which shows nothing new.
+  const places = all.filter((one, index) => !isSameLine(one, all[index - 1])).slice(0, shownPlaces);
   const traced = places.map(({ source: { label, text, file = "" }, place }, index) =>
     placeText(index === 0 ? "in" : "called from", label, text ?? fileText(file), place),
   );
   return { ename, evalue, traceback: [heading(ename, evalue), ...traced, ...causeLines(cause)] };
+}
+
+function isSameLine(one: StackPlace, other: StackPlace | undefined): boolean {
+  return one.source === other?.source && one.place.line === other.place.line;
 }
 
 function named(cause: unknown): { ename: string; evalue: string } {
@@ -71,9 +77,10 @@ function heading(ename: string, evalue: string): string {
   return `\u001b[1;31m${ename}\u001b[0m: ${evalue}`;
 }
 
+/** What an error came from, unless it carries the facts of its case: then its own message tells all. */
 function causeLines(cause: unknown): readonly string[] {
   const inner = cause instanceof Error ? cause.cause : undefined;
-  if (inner === undefined) return [];
+  if (!(cause instanceof Error) || inner === undefined || "facts" in cause) return [];
   const { ename, evalue } = named(inner);
   return [`because of ${ename}: ${evalue}`];
 }
