@@ -1,4 +1,10 @@
-import type { NextReading, Reach, Solved } from "../../src/decision/index.js";
+import {
+  amount,
+  type GroupReach,
+  type NextReading,
+  type Reach,
+  type Solved,
+} from "../../src/decision/index.js";
 import { type Figure, figure } from "../figures/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
 import { projectedName } from "./show-forecast.js";
@@ -12,35 +18,65 @@ export function showReach(found: Reach): readonly (Table | Figure)[] {
 }
 
 function reachTable(found: Reach): Table {
-  const time = { kind: "number", digits: 5, unit: found.periodUnit } as const;
+  const dated = found.groups.some((group) => !group.words.horizon.startsWith(found.periodUnit));
+  const time = dated
+    ? ({ kind: "text" } as const)
+    : ({ kind: "number", digits: 5, unit: found.periodUnit } as const);
+  const random = found.groups.some((group) => group.draws > 1);
   const grouped: Column[] = found.groups.length > 1 ? [{ key: "who", label: "Group", kind: "text" }] : [];
   return table({
-    title: `When ${found.state} reaches ${found.value} ${found.unit}`,
+    title: `When ${found.state} reaches ${amountWords(found)} by ${found.rule.replaceAll("\n", "; ")}`,
     columns: [
       ...grouped,
       { key: "time", label: "Without random change", ...time },
-      { key: "lower", label: `Interval ${percent(found.level)}, from`, ...time },
-      { key: "upper", label: "to", ...time },
-      { key: "firstPeriod", label: "First recorded period", ...time },
-      { key: "never", label: "Share of draws never there", kind: "probability", pairedWith: "neverError" },
-      { key: "neverError", label: "Monte-Carlo error", kind: "number", digits: 1 },
+      ...(random ? interval(time) : []),
+      { key: "firstPeriod", label: "First period", ...time },
+      ...(random ? never : []),
     ],
     rows: found.groups.map((group) => ({
       ...group,
       who: projectedName(group),
-      time: group.time ?? "not reached",
-      firstPeriod: group.firstPeriod ?? "not reached",
-      lower: group.lower ?? "none",
-      upper: group.upper ?? "none",
+      ...timesOf(group, dated),
     })),
-    notes: [`The interval carries the uncertainty of the ${found.margin}.`, found.sentence],
+    notes: [
+      ...(random ? [`The interval carries the uncertainty of the ${found.margin}.`] : []),
+      found.sentence,
+    ],
   });
+
+  function interval(of: typeof time): Column[] {
+    return [
+      { key: "lower", label: `Interval ${percent(found.level)}, from`, ...of },
+      { key: "upper", label: "to", ...of },
+    ];
+  }
+}
+
+const never: readonly Column[] = [
+  { key: "never", label: "Share of draws never there", kind: "probability", pairedWith: "neverError" },
+  { key: "neverError", label: "Monte-Carlo error", kind: "number", digits: 1 },
+];
+
+function timesOf(group: GroupReach, dated: boolean): Readonly<Record<string, number | string>> {
+  const missing = group.beginsPast ? "past it from the start" : "not reached";
+  const { words } = group;
+  return {
+    time: (dated ? words.time : group.time) ?? missing,
+    firstPeriod: (dated ? words.firstPeriod : group.firstPeriod) ?? missing,
+    lower: (dated ? words.lower : group.lower) ?? "none",
+    upper: (dated ? words.upper : group.upper) ?? "none",
+  };
+}
+
+/** "120 ×10⁴ cells/mL", as the sentence has it. */
+function amountWords({ value, unit }: Reach): string {
+  return amount(`${value}`, unit);
 }
 
 function reachFigure(found: Reach): Figure {
   return figure({
-    title: `By when ${found.state} is at or past ${found.value} ${found.unit}`,
-    x: { title: "First recorded period", unit: found.periodUnit },
+    title: `By when ${found.state} is at or past ${amountWords(found)}`,
+    x: { title: "First period", unit: found.periodUnit },
     y: { title: "Share of draws there by then", ends: [0, 1] },
     layers: found.groups.map((group) => ({
       mark: "line",

@@ -57,7 +57,9 @@ const several = (key: string, label: string, names: readonly string[]): readonly
 
 function aheadTable(ahead: Forecast): Table {
   const level = Math.max(...ahead.options.levels);
-  const rows = ahead.groups.flatMap((group) => rowsAhead(group, level));
+  const each = Math.max(4, Math.floor(shownRows / (ahead.groups.length * ahead.fit.rule.states.length)));
+  const rows = ahead.groups.flatMap((group) => rowsAhead(group, level, each));
+  const dated = ahead.groups.some((group) => group.labels !== undefined);
   const unit = ahead.groups[0]?.states[0]?.unit ?? "";
   const number = { kind: "number", digits: 4, unit } as const;
   const percent = `${Number((100 * level).toPrecision(12))}%`;
@@ -66,7 +68,9 @@ function aheadTable(ahead: Forecast): Table {
     columns: [
       ...several("group", "Group", ahead.groups.map(projectedName)),
       ...several("state", "State", ahead.fit.rule.states),
-      { key: "time", label: ahead.fit.observations.period.column, kind: "number", digits: 6 },
+      dated
+        ? { key: "time", label: ahead.fit.observations.period.column, kind: "text" }
+        : { key: "time", label: ahead.fit.observations.period.column, kind: "number", digits: 6 },
       { key: "central", label: "Fitted path", ...number },
       { key: "meanLower", label: `Mean path ${percent}, from`, ...number },
       { key: "meanUpper", label: "to", ...number },
@@ -74,23 +78,37 @@ function aheadTable(ahead: Forecast): Table {
       { key: "futureUpper", label: "to", ...number },
     ],
     rows,
-    limit: 24,
-    notes: notesOf(ahead),
+    limit: rows.length,
+    notes: [
+      ...(ahead.options.periods > each
+        ? [`${each} of ${ahead.options.periods} periods ahead are shown, evenly spread.`]
+        : []),
+      ...notesOf(ahead),
+    ],
   });
 }
 
-function rowsAhead(group: GroupForecast, level: number): Readonly<Record<string, unknown>>[] {
+/** Rows shown of all groups together. */
+const shownRows = 18;
+
+function rowsAhead(group: GroupForecast, level: number, each: number): Readonly<Record<string, unknown>>[] {
+  const present = group.index.indexOf(group.recordEnd);
+  const ahead = group.index.length - 1 - present;
+  const count = Math.min(each, ahead);
+  const shown = new Set(
+    Array.from({ length: count }, (_, k) => present + Math.round(((k + 1) * ahead) / count)),
+  );
   return group.states.flatMap((state) => {
     const band = (kind: string) => state.bands.find((each) => each.kind === kind && each.level === level)!;
     const mean = band("mean path");
     const future = band("future observation");
-    return group.index.flatMap((index, t) =>
-      index <= group.recordEnd
+    return group.index.flatMap((_, t) =>
+      !shown.has(t)
         ? []
         : {
             group: projectedName(group),
             state: state.state,
-            time: group.time[t],
+            time: group.labels?.[t] ?? group.time[t],
             central: state.central[t],
             meanLower: mean.lower[t],
             meanUpper: mean.upper[t],

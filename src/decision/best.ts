@@ -2,7 +2,7 @@ import type { Fit } from "../estimate/index.js";
 import { quantile } from "../numeric/index.js";
 import type { Ground } from "../projection/index.js";
 import type { Rule } from "../rule/index.js";
-import { amount, levelWords, plain, rounded } from "./amount.js";
+import { amount, levelWords, opened, plain, rounded } from "./amount.js";
 import { findPeak } from "./find-peak.js";
 import { isRisk, type Measure, measuredWords, measureWords } from "./measure.js";
 import { type MeasureReader, measureReader } from "./read-measure.js";
@@ -157,5 +157,5 @@ function bestSentence(
     : "";
   const hold = conditionWords(standing.rule, standing.fit);
   const best = measuredWords(measure, answer.achieved, 0, standing);
-  return `${answer.measure} is ${sign > 0 ? "largest" : "smallest"}, ${best}, with ${setting} at ${amount(rounded(value, spread), unit)}${margin}, and ${flat}${end}, provided ${hold}.`;
+  return `${opened(answer.measure)} is ${sign > 0 ? "largest" : "smallest"}, ${best}, with ${setting} at ${amount(rounded(value, spread), unit)}${margin}, and ${flat}${end}, provided ${hold}.`;
 }

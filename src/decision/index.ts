@@ -1,4 +1,5 @@
 export type { AcrossUnits } from "./across-units.js";
+export { amount } from "./amount.js";
 export { type Best, type BestOptions, best } from "./best.js";
 export type { DeltaMargin } from "./delta-margin.js";
 export type { Measure } from "./measure.js";

@@ -91,11 +91,6 @@ export function measuredClause(measure: Measure, value: number, error: number, u
   return `${measureWords(measure, units)} is ${said}`;
 }
 
-/** The same at the beginning of a sentence: names keep their first letter, words get a capital. */
-export function openingClause(measure: Measure, value: number, error: number, units: MeasureUnits): string {
-  return measuredClause(measure, value, error, units).replace(/^the /, "The ");
-}
-
 /** A measure's value as a sentence writes it. */
 export function measuredWords(measure: Measure, value: number, error: number, units: MeasureUnits): string {
   if (isRisk(measure)) return value === 0 ? "none in the draws made" : percent(value, error);

@@ -11,6 +11,8 @@ export interface ReachOptions {
   readonly direction: Direction;
   /** Level of the interval; default 0.95. */
   readonly level?: number;
+  /** Say as well when a new unit would get there, the variance between units added; from three groups on. */
+  readonly newUnit?: boolean;
 }
 
 /** The answer for one group and scenario. Times are in the unit of the period column. */
@@ -18,10 +20,14 @@ export interface GroupReach {
   readonly group: string;
   /** "" where there is a single scenario. */
   readonly scenario: string;
-  /** On the path at the estimates; undefined where it does not get there within the forecast. */
+  /** On the path at the estimates; undefined where it does not get there within the forecast, or begins past it. */
   readonly time: number | undefined;
-  /** First recorded period at or past the value, on the path at the estimates. */
+  /** First whole period at or past the value, on the path at the estimates. */
   readonly firstPeriod: number | undefined;
+  /** Where the record itself shows the value passed: the time of the first such row. */
+  readonly recorded: number | undefined;
+  /** Whether the path begins at or past the value: then there is no time at which it gets there. */
+  readonly beginsPast: boolean;
   /** Across draws; a limit is undefined where that share of draws never gets there. */
   readonly lower: number | undefined;
   readonly upper: number | undefined;
@@ -40,12 +46,23 @@ export interface GroupReach {
   readonly tendsTo: { readonly value: number; readonly lower: number; readonly upper: number } | undefined;
   /** Last time the forecast covers. */
   readonly horizon: number;
+  /** The times in words: with the period's unit, or as dates where the record has them. */
+  readonly words: {
+    readonly time: string | undefined;
+    readonly firstPeriod: string | undefined;
+    readonly lower: string | undefined;
+    readonly upper: string | undefined;
+    readonly recorded: string | undefined;
+    readonly horizon: string;
+  };
   readonly sentence: string;
 }
 
 /** When a state reaches a value, with its margin. */
 export interface Reach {
   readonly kind: "reach";
+  /** The rule's text. */
+  readonly rule: string;
   readonly state: string;
   readonly unit: string;
   readonly periodUnit: string;
@@ -55,7 +72,7 @@ export interface Reach {
   /** What the margin carries. */
   readonly margin: "constants" | "constants and process errors" | "random change";
   readonly groups: readonly GroupReach[];
-  /** Over the units of the record, where there are several and all get there: their mean, and a new unit. */
+  /** Where asked for: over the units of the record, their mean, and a new unit. */
   readonly across: AcrossUnits | undefined;
   readonly sentence: string;
 }

@@ -14,14 +14,19 @@ function recordWords(fit: Fit): string {
   return `the record of ${count} values to ${label ?? `${period.unit} ${Number(last.toPrecision(6))}`}`;
 }
 
+/** Longest rule that is named in a sentence. */
+const longest = 60;
+
 /** What must hold for an answer: the record's going on, or the rule; and inputs that go as planned. */
 export function conditionWords(rule: Rule, fit: Fit | undefined): string {
   const planned =
     rule.inputs.length === 0
       ? ""
       : `${rule.inputs.join(" and ")} ${rule.inputs.length === 1 ? "goes" : "go"} as planned and `;
-  if (fit !== undefined) return `${planned}it goes on as in ${recordWords(fit)}`;
-  return `${planned}the rule${rule.constants.length === 0 ? " holds" : " and its constants hold"}`;
+  const short = rule.text.length <= longest && !rule.text.includes("\n");
+  if (fit !== undefined)
+    return `${planned}it goes on as in ${recordWords(fit)}${short ? `, by the rule ${rule.text}` : ""}`;
+  return `${planned}the rule${short ? ` ${rule.text}` : ""}${rule.constants.length === 0 ? " holds" : " and its constants hold"}`;
 }
 
 /** How a group is named: "flask B", or "N" where there is a single one. */

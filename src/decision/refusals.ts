@@ -26,6 +26,14 @@ export function refuseLevel(level: number): ModelError {
   );
 }
 
+export function refuseFewUnits(count: number): ModelError {
+  return new ModelError(
+    "too-few-units",
+    `The time of a new unit needs the scatter between at least 3 recorded ones; there ${count === 1 ? "is 1" : `are ${count}`}. Leave newUnit out.`,
+    { count },
+  );
+}
+
 export function refuseNotWatched(state: string, value: number, direction: string): ModelError {
   return new ModelError(
     "paths-not-kept",

@@ -1,8 +1,8 @@
 import type { Fit } from "../estimate/index.js";
 import type { Ground } from "../projection/index.js";
 import type { Rule } from "../rule/index.js";
-import { percent, plain } from "./amount.js";
-import { isRisk, type Measure, measuredWords, measureWords, openingClause } from "./measure.js";
+import { opened, percent, plain } from "./amount.js";
+import { isRisk, type Measure, measuredClause, measuredWords, measureWords } from "./measure.js";
 import { measureReader } from "./read-measure.js";
 import { refuseRiskObjective } from "./refusals.js";
 import { settingOf } from "./set-value.js";
@@ -114,7 +114,7 @@ function sentenceOf(
   rows: readonly SensitivityRow[],
   standing: Standing,
 ): string {
-  const said = openingClause(asked, answer, 0, standing);
+  const said = opened(measuredClause(asked, answer, 0, standing));
   const [first] = rows;
   if (first === undefined) return `${said}; nothing was moved.`;
   const change = ([lower, upper]: readonly [number, number]): string =>

@@ -11,6 +11,7 @@ import type { ForecastOptions, ForecastSettings } from "./forecast-options.js";
 import { forecastWarnings } from "./forecast-warnings.js";
 import { type Gatherer, gatherer } from "./gather.js";
 import { noiseDraw } from "./noise.js";
+import { periodLabels } from "./period-labels.js";
 import { passagesOf, placedWatches } from "./placed-watches.js";
 import { type Predictability, predictabilityOf } from "./predictability.js";
 import type { GroupForecast } from "./projected-group.js";
@@ -58,12 +59,14 @@ function projected(
   const shown = withHorizon(central, predictability, recordEnd - from);
   const index = Array.from({ length: periods + 1 }, (_, t) => from + t);
   const step = observations.period.step.every;
+  const labels = periodLabels(observations, ground.recorded, index);
   return {
     group: group.group,
     scenario: scenario.name,
     plans: scenario.plans,
     index,
     time: index.map((t) => ground.recorded.time[0]! + t * step),
+    ...(labels && { labels }),
     recordEnd,
     states: rule.states.map((state, s) => ({
       state,

@@ -61,7 +61,7 @@ function beyondRecord({ asked, ground }: WarningSource): Warning[] {
   return [
     {
       code: "longer-than-record",
-      message: `Projection of ${asked} periods from ${observed} observed: treat beyond ${observed} as conditional.`,
+      message: `Projection of ${asked} ${asked === 1 ? "period" : "periods"} from ${observed} observed: treat beyond ${observed} as conditional.`,
     },
   ];
 }

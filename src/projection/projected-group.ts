@@ -31,6 +31,8 @@ export interface GroupForecast {
   readonly index: readonly number[];
   /** The period column's values there. */
   readonly time: readonly number[];
+  /** The dates there, where the record's periods are dates. */
+  readonly labels?: readonly string[];
   /** Step index of the last recorded value; of the first value in a simulation. */
   readonly recordEnd: number;
   readonly states: readonly ProjectedState[];

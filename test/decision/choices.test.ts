@@ -56,7 +56,7 @@ describe("the largest sustained yield", () => {
     });
     expect(found.value).toBe(5);
     expect(found.sentence).toBe(
-      "x 4 periods ahead is largest, 20, with c at 5, and within 1% of that from 4.95 to 5; that is an end of the range 0 to 5, so a wider range may hold a better one, provided the rule and its constants hold.",
+      "The value of x 4 periods ahead is largest, 20, with c at 5, and within 1% of that from 4.95 to 5; that is an end of the range 0 to 5, so a wider range may hold a better one, provided the rule x[t+1] = x + c and its constants hold.",
     );
   });
 });

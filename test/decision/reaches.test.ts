@@ -2,6 +2,7 @@ import { describe, expect, test } from "vitest";
 import { reaches } from "../../src/decision/index.js";
 import { fit } from "../../src/estimate/index.js";
 import { forecast, simulate } from "../../src/projection/index.js";
+import { observations, tableOf } from "../../src/record/index.js";
 import { recurrence } from "../../src/rule/index.js";
 import { cultureRecord, flaskRecord } from "./harbour-records.js";
 
@@ -40,7 +41,7 @@ describe("a culture on its way to a density", () => {
 
   test("says so in one sentence", () => {
     expect(reaches(ahead, { value: 0.8, direction: "rising" }).sentence).toMatch(
-      /^N reaches 0\.8 at hour 8\.14\d \(95% interval 8\.0\d\d to 8\.2\d\d\); the first recorded hour at or past it is 8\.5, provided it goes on as in the record of 21 values to hour 10\. The margin is that of the fitted constants, not of a further reading's error\.$/,
+      /^N is already recorded at or past 0\.8, at hour 8\.5; by the rule it reaches 0\.8 at hour 8\.14\d \(95% interval 8\.0\d\d to 8\.2\d\d\); the first period at or past it is hour 8\.5, provided it goes on as in the record of 21 values to hour 10, by the rule N\[t\+1\] = R\*N\/\(1 \+ \(R - 1\)\*N\/K\)\. The margin is that of the fitted constants, not of a further reading's error\.$/,
     );
   });
 });
@@ -135,11 +136,15 @@ describe("several flasks", () => {
   const counts = flaskRecord({ A: flask(1.3, 0), B: flask(1.25, 3), C: flask(1.35, 6) });
   const growth = recurrence("N[t+1] = R*N");
   const fitted = fit(growth, counts, { errors: "observation", spread: "proportional" });
-  const found = reaches(forecast(fitted, { periods: 12, paths: 500 }), { value: 120, direction: "rising" });
+  const found = reaches(forecast(fitted, { periods: 12, paths: 500 }), {
+    value: 120,
+    direction: "rising",
+    newUnit: true,
+  });
 
   test("are answered for in one sentence that names the first and the last", () => {
     expect(found.sentence).toMatch(
-      /^N reaches 120 ×10⁴ cells\/mL first in flask C, at hour \d+\.\d+ \(95% interval \d+\.\d+ to \d+\.\d+\), and last in flask B, at hour \d+\.\d+ \(\d+\.\d+ to \d+\.\d+\); the first recorded hour at which all 3 are at or past it is 15; for a new one, with the scatter between 3 added, the 95% interval is hour /,
+      /^N reaches 120 ×10⁴ cells\/mL first in flask C, at hour \d+\.\d+ \(95% interval \d+\.\d+ to \d+\.\d+\), and last in flask B, at hour \d+\.\d+ \(\d+\.\d+ to \d+\.\d+\); the first period at which all 3 are at or past it is hour 15; for a new flask, with the scatter between the 3 added, the 95% interval is /,
     );
   });
 
@@ -167,6 +172,70 @@ test("between two periods a geometric, an affine and a Beverton-Holt path lie on
     const found = simulate(recurrence(text), { initial: { x }, periods: 8 });
     expect(reaches(found, { value, direction: "rising" }).groups[0]!.time).toBeCloseTo(3.37, 9);
   }
+});
+
+describe("a loan recorded by month ends", () => {
+  const dates = ["2026-08-31", "2026-09-30", "2026-10-31", "2026-11-30", "2026-12-31", "2027-01-31"];
+  const owed = [6000, 5530.02, 5054.61, 4573.75, 4087.33, 3595.36];
+  const loan = observations(tableOf({ date: dates, owed }), {
+    period: "date",
+    step: "month-end",
+    value: "owed",
+    unit: "crowns",
+  });
+  const fitted = fit(recurrence("owed[t+1] = owed*(1 + i) - p"), loan, { errors: "process" });
+  const ahead = forecast(fitted, { periods: 12, paths: 400 });
+
+  test("is answered for in dates", () => {
+    expect(ahead.groups[0]!.labels!.slice(0, 3)).toEqual(["2027-01-31", "2027-02-28", "2027-03-31"]);
+    const found = reaches(ahead, { value: 3000, direction: "falling" });
+    expect(found.groups[0]!.words.time).toBe("between 2027-02-28 and 2027-03-31");
+    expect(found.sentence).toMatch(
+      /^The value of owed reaches 3000 crowns between 2027-02-28 and 2027-03-31 \(95% interval 2027-02-28 to 2027-03-31\); the first period at or past it is 2027-03-31, provided it goes on as in the record of 6 values to 2027-01-31, by the rule /,
+    );
+  });
+
+  test("that begins past the value asked for gets no date", () => {
+    const found = reaches(ahead, { value: 7000, direction: "falling" });
+    expect(found.groups[0]!.time).toBeUndefined();
+    expect(found.groups[0]!.beginsPast).toBe(true);
+    expect(found.sentence).toMatch(
+      /^The value of owed is at or below 7000 crowns from the first row on, so there is no time at which it gets there \(was direction: "rising" meant\?\), provided .*\.$/,
+    );
+  });
+
+  test("that passed the value in the record is said to have", () => {
+    expect(reaches(ahead, { value: 5000, direction: "falling" }).sentence).toMatch(
+      /^The value of owed is already recorded at or past 5000 crowns, at 2026-11-30/,
+    );
+  });
+});
+
+test("dates go by days and weeks, and by months that keep their day", () => {
+  const at = (dates: readonly string[], step: "week" | "month" | "quarter"): readonly string[] => {
+    const record = observations(tableOf({ date: [...dates], x: dates.map((_, i) => 10 + i + (i % 2)) }), {
+      period: "date",
+      step,
+      value: "x",
+    });
+    const fitted = fit(recurrence("x[t+1] = x + c"), record, { errors: "process" });
+    return forecast(fitted, { periods: 2, paths: 10 }).groups[0]!.labels!;
+  };
+  expect(at(["2026-02-16", "2026-02-23", "2026-03-02", "2026-03-09", "2026-03-16"], "week")).toEqual([
+    "2026-03-16",
+    "2026-03-23",
+    "2026-03-30",
+  ]);
+  expect(at(["2025-08-15", "2025-09-15", "2025-10-15", "2025-11-15", "2025-12-15"], "month")).toEqual([
+    "2025-12-15",
+    "2026-01-15",
+    "2026-02-15",
+  ]);
+  expect(at(["2025-03-31", "2025-06-30", "2025-09-30", "2025-12-31", "2026-03-31"], "quarter")).toEqual([
+    "2026-03-31",
+    "2026-06-30",
+    "2026-09-30",
+  ]);
 });
 
 test("questions that cannot be asked are refused", () => {

@@ -95,7 +95,7 @@ test("the stock that keeps the risk of running out at 2% is the quantile of one 
   expect(Math.abs(found.solutions[0]!.exact - exact)).toBeLessThan(0.16 + 0.02);
   expect(found.solutions[0]!.achieved).toBeLessThanOrEqual(0.02);
   expect(found.sentence).toMatch(
-    /^With stock\[0\] at or above 51 pieces, the risk that stock falls to 0 pieces is 1\.\d+% \(Monte-Carlo error 0\.0\d%\), provided the rule and its constants hold\.$/,
+    /^With stock\[0\] at or above 51 pieces, the risk that stock falls to 0 pieces is 1\.\d+% \(Monte-Carlo error 0\.0\d%\), provided the rule stock\[t\+1\] = stock - demand and its constants hold\.$/,
   );
 });
 
@@ -117,7 +117,7 @@ test("a fit's answer has an interval, and solving it back gives the target", () 
   expect(solution!.margin!.lower!).toBeLessThan(solution!.value);
   expect(solution!.margin!.upper!).toBeGreaterThan(solution!.value);
   expect(found.sentence).toMatch(
-    /^With N\[0\] at 0\.0\d+ \(95% interval 0\.0\d+ to 0\.0\d+\), N rises to 0\.8 at hour 6, provided it goes on as in the record of 21 values to hour 10\.$/,
+    /^With N\[0\] at 0\.0\d+ \(95% interval 0\.0\d+ to 0\.0\d+\), N rises to 0\.8 at hour 6, provided it goes on as in the record of 21 values to hour 10, by the rule N\[t\+1\] = R\*N\/\(1 \+ \(R - 1\)\*N\/K\)\.$/,
   );
   expect(
     reaches(forecast(fitted, { periods: 20 }), { value: 0.8, direction: "rising" }).groups[0]!.time,
