@@ -66,7 +66,7 @@ export function answer(said: string): void {
   const cautions = caseLog.cautions();
   const html =
     `<p style="margin:0;color:${look.quiet};font-size:13px;font-weight:600">Answer</p>` +
-    `<p style="margin:.2em 0 0;font-size:17px">${escapeHtml(sentence)}</p>` +
+    answerParts(sentence) +
     cautions.map((text) => `<p style="margin:.4em 0 0">Caution: ${escapeHtml(text)}</p>`).join("");
   show(
     showing({ kind: "answer", sentence }, () => ({
@@ -75,6 +75,13 @@ export function answer(said: string): void {
       "text/plain": [`Answer: ${sentence}`, ...cautions.map((text) => `Caution: ${text}`)].join("\n"),
     })),
   );
+}
+
+/** The first sentence is what the client reads; the rest holds its margins and conditions. */
+function answerParts(answer: string): string {
+  const [, first = answer, rest = ""] = /^(.+?[.!?])\s+(?=\p{Lu})(.*)$/su.exec(answer) ?? [];
+  const more = rest === "" ? "" : `<p style="margin:.3em 0 0;font-size:14px">${escapeHtml(rest)}</p>`;
+  return `<p style="margin:.2em 0 0;font-size:17px;font-weight:600">${escapeHtml(first)}</p>${more}`;
 }
 
 /**

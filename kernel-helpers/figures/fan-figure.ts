@@ -1,6 +1,7 @@
 import { type Axis, type Figure, figure, type Panel } from "./figure.js";
 import type { Layer } from "./layer.js";
 import { type DrawnLine, type RecordedSeries, recordedStyle } from "./recorded-series.js";
+import { sharedScale } from "./shared-scale.js";
 
 /** A band of a projection. */
 export interface DrawnBand {
@@ -53,7 +54,12 @@ export function fanFigure({ title, x, y, series, threshold, event, notes = [] }:
       ],
     }),
   );
-  return figure({ title, panels, notes: [...(event ? [event] : []), ...notes], summary: event ?? "" });
+  return figure({
+    title,
+    panels: sharedScale(panels),
+    notes: [...(event ? [event] : []), ...notes],
+    summary: event ?? "",
+  });
 }
 
 function fanLayers({ recorded, central, bands, recordEnd, horizon }: ProjectedSeries): Layer[] {

@@ -1,6 +1,7 @@
 import { type Axis, type Figure, figure, type Panel } from "./figure.js";
 import type { Layer } from "./layer.js";
 import { type DrawnLine, type RecordedSeries, recordedStyle, ruleStyle } from "./recorded-series.js";
+import { sharedScale } from "./shared-scale.js";
 
 /** One series with what rules make of it. */
 export interface FittedSeries {
@@ -24,7 +25,7 @@ export interface FittedFigureOptions {
 /** Observed values against fitted paths, a panel a series; rivals are lines of different dash and colour. */
 export function fittedFigure({ title, x, y, series, notes = [] }: FittedFigureOptions): Figure {
   const panels = series.map((each): Panel => ({ title: each.name, x, y, layers: seriesLayers(each) }));
-  return figure({ title, panels, notes });
+  return figure({ title, panels: sharedScale(panels), notes });
 }
 
 function seriesLayers({ observed, replicates, fitted }: FittedSeries): Layer[] {

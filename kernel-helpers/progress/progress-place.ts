@@ -12,6 +12,9 @@ export interface ProgressPlace {
 
 type Display = (bundle: Bundle, options: { display_id: string; update?: boolean }) => void;
 
+/** By this a page for the client knows what is of use only to who ran the notebook. */
+const mark = "application/vnd.periodwise.progress+json";
+
 let displays = 0;
 
 /** The notebook when a kernel offers one, else the terminal. */
@@ -31,10 +34,8 @@ function inNotebook(display: Display): ProgressPlace["show"] {
   const display_id = `periodwise-progress-${process.pid}-${++displays}`;
   let shown = false;
   return (line, share) => {
-    display(
-      { "text/plain": oneLine(line), "text/html": lineHtml(line, share) },
-      { display_id, update: shown },
-    );
+    const html = line === "" ? "" : lineHtml(line, share);
+    display({ [mark]: {}, "text/plain": oneLine(line), "text/html": html }, { display_id, update: shown });
     shown = true;
   };
 }
@@ -42,8 +43,9 @@ function inNotebook(display: Display): ProgressPlace["show"] {
 /** One line that is written over; where the output is a file, only what stays. */
 function inTerminal(out: NodeJS.WriteStream): ProgressPlace["show"] {
   return (line, _share, last) => {
-    if (out.isTTY) out.write(`\r\u001b[2K${oneLine(line).slice(0, out.columns - 1)}${last ? "\n" : ""}`);
-    else if (last) out.write(`${oneLine(line)}\n`);
+    if (out.isTTY)
+      out.write(`\r\u001b[2K${oneLine(line).slice(0, out.columns - 1)}${last && line !== "" ? "\n" : ""}`);
+    else if (last && line !== "") out.write(`${oneLine(line)}\n`);
   };
 }
 

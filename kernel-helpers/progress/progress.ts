@@ -9,17 +9,19 @@ export interface Progress {
   readonly at: (done: number, of?: number) => void;
   /** Says that so much more is done; default 1. */
   readonly advance: (by?: number) => void;
-  /** Ends the line as a record of what was done, and gives that record. Work under a second leaves nothing. */
+  /** Ends the line as a record of what was done, and gives that record. Short work leaves nothing. */
   readonly end: () => string;
 }
 
-/** Seconds of work before anything is shown, and between two showings. */
+/** Seconds of work before anything is shown, between two showings, and before a record is worth keeping. */
 const patience = 1;
 const pace = 0.2;
+const memorable = 5;
 
 /**
  * Shows how far a long piece of work is: what, how much of how much, how fast, and the time left. In a notebook one
- * display is updated in place, in a terminal one line; both end as a plain record.
+ * display is updated in place, in a terminal one line; both end as a plain record, or as nothing when the work took
+ * less than five seconds.
  *
  * An interrupt of the cell is obeyed at the next `at` or `advance`.
  *
@@ -47,7 +49,8 @@ export function progressAt(place: ProgressPlace, label: string, total?: number):
   const end = (stopped: boolean): string => {
     if (record !== undefined) return record;
     record = progressRecord(standing(), stopped);
-    if (shownAt > Number.NEGATIVE_INFINITY || stopped) place.show(record, undefined, true);
+    const kept = stopped || standing().seconds >= memorable;
+    if (shownAt > Number.NEGATIVE_INFINITY || stopped) place.show(kept ? record : "", undefined, true);
     return record;
   };
   const at = (now: number, of: number | undefined = all): void => {

@@ -48,11 +48,13 @@ export function laidOut(table: Table): LaidOut {
   if (texts.some((line) => line.includes(absent))) notes.push({ mark: absent, text: "no value" });
   if (cut) notes.push({ mark: "", text: cutNote(head, tail, rows.length, table) });
   return {
-    headings: columns.map((column) => ({
-      text: heading(column, table),
-      mark: marks.at(column.key, undefined),
-      numeric: column.kind !== "text",
-    })),
+    headings: headings(table)
+      .map((text, j) => ({ column: columns[j] as Column, text }))
+      .map(({ column, text }) => ({
+        text,
+        mark: marks.at(column.key, undefined),
+        numeric: column.kind !== "text",
+      })),
     rows: cells.slice(0, places.length),
     totals: cells.slice(places.length),
     cutAfter: cut ? head : undefined,
@@ -69,10 +71,18 @@ function settledDecimals(
   return commonDecimals(values, column.digits ?? 4);
 }
 
-/** "Density (10⁴ cells/mL)": the label with its unit; a money column without one takes the currency set. */
-export function heading(column: Column, table: Table): string {
-  const unit = column.unit || (column.kind === "money" ? table.format.currency : "");
-  return unit === "" ? column.label : `${column.label} (${raised(unit)})`;
+/**
+ * The headings of a table: label with unit, "Density (10⁴ cells/mL)"; a money column without a unit takes the
+ * currency set. "to" behind "Interval, from" is written in full, because a heading is also read alone.
+ */
+export function headings({ columns, format }: Table): string[] {
+  return columns.map((column, j) => {
+    const before = columns[j - 1]?.label ?? "";
+    const ends = column.label === "to" && before.endsWith(", from");
+    const label = ends ? before.replace(/from$/, "to") : column.label;
+    const unit = column.unit || (column.kind === "money" ? format.currency : "");
+    return unit === "" ? label : `${label} (${raised(unit)})`;
+  });
 }
 
 function cutNote(head: number, tail: number, all: number, { format }: Table): string {
@@ -102,10 +112,13 @@ function footnoteMarks(notes: Table["notes"]): {
   };
 }
 
-/** Pads numbers on the right, so that decimal signs stand under each other in a right-aligned column. */
+/**
+ * Pads numbers on the right, so that decimal signs stand under each other in a right-aligned column. Estimates are
+ * left as they are: a column of them holds constants of different sizes, with nothing to compare.
+ */
 function alignFractions(texts: string[][], columns: readonly Column[], decimal: string): void {
   columns.forEach((column, j) => {
-    if (column.kind === "text") return;
+    if (column.kind === "text" || column.kind === "estimate") return;
     const widths = texts.map((line) => fractionWidth(line[j] ?? "", decimal));
     const widest = Math.max(0, ...widths.filter((width) => width !== undefined));
     texts.forEach((line, i) => {

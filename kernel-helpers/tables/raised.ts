@@ -15,10 +15,13 @@ const superscripts: Readonly<Record<string, string>> = {
 /**
  * Whole powers of a unit as raised digits: units are read more easily so, and no markup is needed.
  *
- * @example raised("10^4 cells/mL"); // "10⁴ cells/mL"
+ * A number before a power of ten is told apart from it.
+ *
+ * @example raised("120 10^4 cells/mL"); // "120 × 10⁴ cells/mL"
  */
 export function raised(text: string): string {
-  return text.replace(/(?<=[\p{L}\d)])\^(-?\d{1,2})(?![\d.])/gu, (_, power: string) =>
+  const multiplied = text.replace(/(?<=\d) +(?=10\^-?\d)/g, " × ");
+  return multiplied.replace(/(?<=[\p{L}\d)])\^(-?\d{1,2})(?![\d.])/gu, (_, power: string) =>
     [...power].map((sign) => superscripts[sign] ?? sign).join(""),
   );
 }

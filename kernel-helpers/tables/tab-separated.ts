@@ -1,5 +1,5 @@
 import { minorUnits } from "./fixed-decimals.js";
-import { heading } from "./laid-out.js";
+import { headings } from "./laid-out.js";
 import { oneLine } from "./plain-text.js";
 import type { Column, Table } from "./table.js";
 
@@ -10,7 +10,7 @@ import type { Column, Table } from "./table.js";
  * @example tabSeparated(table({ title: "", columns: [{ key: "n", label: "Week", kind: "integer" }], rows: [{ n: 1 }] }));
  */
 export function tabSeparated(table: Table): string {
-  const head = table.columns.map((column) => oneLine(heading(column, table)));
+  const head = headings(table).map(oneLine);
   const lines = [...table.rows, ...table.totals].map((row) =>
     table.columns.map((column) => plain(row[column.key], column, table)),
   );

@@ -60,15 +60,22 @@ function copyButton(table: Table): string {
   return `<pw-copy role="button" tabindex="0" aria-label="Copy as tab-separated text" data-said="Copy" data-copy="${text}" onclick="${copy}" onkeydown="${keyed}"></pw-copy>`;
 }
 
+// Shadows at the sides of a table that goes on beyond its box; they are covered where it ends.
+const cover = (side: string, to: string): string =>
+  `linear-gradient(to ${to},${look.paper} 40%,transparent) ${side}/34px 100% no-repeat local`;
+const shadow = (side: string, to: string): string =>
+  `linear-gradient(to ${to},rgba(22,38,46,.28),transparent) ${side}/12px 100% no-repeat scroll`;
+const scrollShadow = `background:${cover("left", "right")},${cover("right", "left")},${shadow("left", "right")},${shadow("right", "left")},${look.paper}`;
+
 // Each selector names the box twice, to win over what a notebook's own page says about tables.
 const box = ".pw-table.pw-table";
 const tableStyle: string = `<style>
 ${box}{margin:.8em 0 1em;color:${look.ink};font-family:${typeface};font-size:14px;line-height:1.4;max-width:100%}
-${box} .pw-scroll{overflow-x:auto;max-width:100%;position:relative}
-${box} table{border-collapse:collapse;border:0;border-top:3px solid ${look.accent};background:${look.paper};margin:0;font-size:14px;width:auto;table-layout:auto}
+${box} .pw-scroll{overflow-x:auto;max-width:100%;position:relative;${scrollShadow}}
+${box} table{border-collapse:collapse;border:0;border-top:3px solid ${look.accent};background:none;margin:0;font-size:14px;width:auto;table-layout:auto}
 ${box} .pw-title{font-weight:600;font-size:15px;margin:0 0 .35em;overflow-wrap:anywhere}
 ${box} th,${box} td{border:0;border-bottom:1px solid ${look.line};padding:.32em .8em;vertical-align:baseline;max-width:min(28em,60vw);overflow-wrap:break-word;background:none;color:${look.ink};white-space:normal}
-${box} thead th{font-weight:600;color:${look.quiet};background:${look.shade};vertical-align:bottom;min-width:3.5em}
+${box} thead th{font-weight:600;color:${look.quiet};background:rgba(11,90,107,.06);vertical-align:bottom;min-width:3.5em}
 ${box} .pw-n{text-align:right;font-variant-numeric:tabular-nums;white-space:nowrap}
 ${box} thead .pw-n{white-space:normal}
 ${box} .pw-n .pw-mark{position:absolute;margin-left:.1em}
@@ -80,5 +87,5 @@ ${box} .pw-notes{color:${look.quiet};font-size:13px;margin:.4em 0 0}
 ${box} .pw-notes p{margin:.15em 0;overflow-wrap:anywhere}
 ${box} pw-copy::before{content:attr(data-said)}
 ${box} pw-copy{display:inline-block;font:inherit;font-size:12px;color:${look.accent};background:${look.paper};border:1px solid ${look.line};border-radius:3px;padding:.1em .7em;margin:.4em 0 0;cursor:pointer}
-@media print{${box} pw-copy{display:none}${box} tr{break-inside:avoid}${box} .pw-scroll{overflow:visible}${box} table{font-size:8.5pt}${box} th,${box} td{padding:.2em .45em}}
+@media print{${box} pw-copy{display:none}${box} tr{break-inside:avoid}${box} .pw-scroll{overflow:visible;background:none}${box} table{font-size:8.5pt}${box} th,${box} td{padding:.2em .45em}}
 </style>`;

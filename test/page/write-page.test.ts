@@ -49,6 +49,26 @@ test("title and question stand first, then the answer, then the notebook", () =>
   expect(page.title).toBe("Ferry loan");
 });
 
+test("an answer's first sentence stands alone; margins and cautions follow it; progress is left out", () => {
+  const sentence = "In month 254. The interval is 250.5 to 258.";
+  const page = read(
+    code(
+      "run()",
+      data({ "application/vnd.periodwise.progress+json": {}, "text/plain": "Refits: 200 of 200" }),
+    ),
+    code(
+      "answer()",
+      data({
+        "application/vnd.periodwise.answer+json": { sentence, cautions: ["Rivals differ."] },
+        "text/plain": "",
+      }),
+    ),
+  );
+  const said = Array.from(page.querySelectorAll(".answer p")).map((p) => p.textContent);
+  expect(said).toEqual(["In month 254.", "The interval is 250.5 to 258.", "Caution: Rivals differ."]);
+  expect(page.querySelector("main")?.textContent).not.toContain("Refits");
+});
+
 describe("markdown", () => {
   test("markup in it is shown as text, and only harmless links are links", () => {
     const page = read(

@@ -56,12 +56,21 @@ test("it ends once, as a plain record", () => {
   const shown = progressAt(place, "Refits", 200);
   clock.seconds = 2;
   shown.at(100);
-  clock.seconds = 4;
+  clock.seconds = 8;
   shown.at(200);
-  expect(shown.end()).toBe("Refits: 200 of 200 in 4.0 s, 50 a second.");
+  expect(shown.end()).toBe("Refits: 200 of 200 in 8.0 s, 25 a second.");
   shown.end();
-  expect(lines.at(-1)).toBe("Refits: 200 of 200 in 4.0 s, 50 a second.");
+  expect(lines.at(-1)).toBe("Refits: 200 of 200 in 8.0 s, 25 a second.");
   expect(lines).toHaveLength(3);
+});
+
+test("work of a few seconds leaves no line behind", () => {
+  const { clock, lines, place } = watched();
+  const shown = progressAt(place, "Refits", 200);
+  clock.seconds = 2;
+  shown.at(100);
+  shown.end();
+  expect(lines).toEqual([expect.stringContaining("100 of 200"), ""]);
 });
 
 test("without a known total it counts", () => {
@@ -99,7 +108,8 @@ describe("in a notebook", () => {
     shown.end();
     expect(calls.map(({ update }) => update)).toEqual([false, true]);
     expect(new Set(calls.map(({ id }) => id)).size).toBe(1);
-    expect(calls[1]?.text).toMatch(/^<b>Refits<\/b>: 1 of 2 in \d\.\d s/);
+    expect(calls[0]?.text).toMatch(/^<b>Refits<\/b>: 1 of 2 \(50%\)/);
+    expect(calls[1]?.text).toBe("");
   });
 
   test("the kernel's interrupt reaches the work", () => {

@@ -86,7 +86,17 @@ describe("digits", () => {
   });
 });
 
-test("text lines up in a terminal, decimal signs under each other", () => {
+test("decimal signs of plain numbers stand under each other", () => {
+  const columns: Column[] = [{ key: "n", label: "Level", kind: "number" }];
+  const rows = [0.5, 13.25, -107, 1e-7, 2e6].map((n) => ({ n }));
+  const lines = tableText(table({ title: "", columns, rows }))
+    .split("\n")
+    .slice(4);
+  const places = lines.filter((line) => line.includes(".")).map((line) => line.indexOf("."));
+  expect(new Set(places).size).toBe(1);
+});
+
+test("text lines up in a terminal, wide letters and footnote marks included", () => {
   const made = table({
     title: "Estimates",
     columns: [...estimate, { key: "unit", label: "Unit", kind: "text" }],
@@ -101,18 +111,37 @@ test("text lines up in a terminal, decimal signs under each other", () => {
   expect(tableText(made)).toMatchInlineSnapshot(`
     "Estimates
 
-    Constant    Estimate  Standard error  Unit
-    ────────  ──────────  ──────────────  ───────
-    K         167     a)          16      10^4/mL
+    Constant   Estimate  Standard error  Unit
+    ────────  ─────────  ──────────────  ───────
+    K            167 a)              16  10^4/mL
     日本語      4.61               0.16
-    r          -1.472              0.018  –
-    ────────  ──────────  ──────────────  ───────
-    Sum         3
+    r         -1.472              0.018  –
+    ────────  ─────────  ──────────────  ───────
+    Sum            3
 
     Profile intervals.
     a: correlated with r
     –: no value"
   `);
+});
+
+test("a heading that only says where an interval ends is written in full", () => {
+  const columns: Column[] = [
+    { key: "a", label: "Interval 95%, from", unit: "h", kind: "number" },
+    { key: "b", label: "to", unit: "h", kind: "number" },
+  ];
+  const text = tableText(table({ title: "", columns, rows: [{ a: 1, b: 2 }] }));
+  expect(text).toContain("Interval 95%, from (h)  Interval 95%, to (h)");
+});
+
+test("powers of units are raised, and told apart from a number before them", () => {
+  const made = table({
+    title: "When N reaches 120 10^4 cells/mL",
+    columns: [{ key: "a", label: "A", unit: "m^2", kind: "text" }],
+    rows: [],
+  });
+  expect(tableText(made)).toContain("When N reaches 120 × 10⁴ cells/mL");
+  expect(tableText(made)).toContain("A (m²)");
 });
 
 test("rows beyond the limit are counted, and the last ones are shown", () => {

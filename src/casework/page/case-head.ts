@@ -1,7 +1,8 @@
 import { joined, type ShownNotebook, type ShownOutput } from "./shown-notebook.js";
 
-/** MIME types by which a case says what it asks and what it answers; both hold JSON. */
+/** MIME types by which outputs say what they are to a page; all hold JSON. */
 const caseType = "application/vnd.periodwise.case+json";
+const progressType = "application/vnd.periodwise.progress+json";
 const answerType = "application/vnd.periodwise.answer+json";
 
 /** What stands at the top of a page. */
@@ -9,7 +10,7 @@ export interface CaseHead {
   readonly title: string | undefined;
   readonly question: string | undefined;
   readonly about: string | undefined;
-  readonly answers: readonly string[];
+  readonly answers: readonly { readonly sentence: string; readonly cautions: readonly string[] }[];
 }
 
 /** Reads a notebook's title, question and answers from what its cells put out. */
@@ -20,15 +21,17 @@ export function caseHead(notebook: ShownNotebook): CaseHead {
     title: text(opened, "title") ?? firstHeading(notebook),
     question: text(opened, "question"),
     about: text(opened, "about"),
-    answers: outputs
-      .map((output) => text(jsonOf(output, answerType), "sentence"))
-      .filter((said) => said !== undefined),
+    answers: outputs.flatMap((output) => {
+      const said = jsonOf(output, answerType);
+      const sentence = text(said, "sentence");
+      return sentence === undefined ? [] : [{ sentence, cautions: texts(said, "cautions") }];
+    }),
   };
 }
 
-/** Whether an output only says what the head of the page says already. */
-export function opensCase(output: ShownOutput): boolean {
-  return jsonOf(output, caseType) !== undefined;
+/** Whether an output is left out of a page: the head says it already, or it tells how long some work took. */
+export function leftOut(output: ShownOutput): boolean {
+  return jsonOf(output, caseType) !== undefined || jsonOf(output, progressType) !== undefined;
 }
 
 function jsonOf(output: ShownOutput, type: string): object | undefined {
@@ -39,6 +42,11 @@ function jsonOf(output: ShownOutput, type: string): object | undefined {
 function text(from: object | undefined, name: string): string | undefined {
   const found = from && (from as Record<string, unknown>)[name];
   return typeof found === "string" && found.trim() !== "" ? found : undefined;
+}
+
+function texts(from: object | undefined, name: string): string[] {
+  const found = from && (from as Record<string, unknown>)[name];
+  return Array.isArray(found) ? found.filter((each) => typeof each === "string") : [];
 }
 
 function firstHeading(notebook: ShownNotebook): string | undefined {

@@ -16,7 +16,8 @@ a{color:var(--accent)}
 .about{color:var(--quiet);font-size:.9rem;margin:.5rem 0 0}
 .answer{background:var(--accent);color:#fff;border-radius:2px 14px 14px 2px;padding:1rem 1.3rem;margin:1.2rem 0 0;max-width:50rem}
 .answer b{display:block;font-size:.85rem;font-weight:600;margin-bottom:.2rem}
-.answer p{margin:.2rem 0;font-size:1.15rem;line-height:1.45;overflow-wrap:anywhere}
+.answer p{margin:.2rem 0;font-size:1.2rem;font-weight:600;line-height:1.4;overflow-wrap:anywhere}
+.answer .rest{font-size:.95rem;font-weight:400}
 .code{margin:1.1rem 0 .3rem;color:var(--quiet);font-size:.88rem}
 .code summary{cursor:pointer;padding:.15rem 0;width:max-content;max-width:100%}
 pre{font:13px/1.45 'DejaVu Sans Mono','Liberation Mono',Consolas,monospace;overflow-x:auto;max-width:100%;margin:.3rem 0;padding:.6rem .8rem;background:var(--shade);border-left:3px solid var(--line)}

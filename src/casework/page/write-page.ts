@@ -1,4 +1,4 @@
-import { type CaseHead, caseHead, opensCase } from "./case-head.js";
+import { type CaseHead, caseHead, leftOut } from "./case-head.js";
 import { escapeText } from "./escape-text.js";
 import { figureLibrary } from "./figure-library.js";
 import { markdownHtml } from "./markdown-html.js";
@@ -43,13 +43,23 @@ export function writePage(notebook: ShownNotebook, options: PageOptions = {}): s
 }
 
 function headHtml({ question, about, answers }: CaseHead, title: string): string {
-  const said = answers.map((sentence) => `<p dir="auto">${escapeText(sentence)}</p>`).join("");
+  const said = answers.map(answerHtml).join("");
   return [
     `<header><h1 dir="auto">${escapeText(title)}</h1>`,
     question ? `<p class="question" dir="auto">${escapeText(question)}</p>` : "",
     about ? `<p class="about" dir="auto">${escapeText(about)}</p>` : "",
     said ? `<section class="answer" aria-label="Answer"><b>Answer</b>${said}</section>` : "",
     "</header>",
+  ].join("");
+}
+
+/** The first sentence is what the client reads; the rest holds its margins and conditions. */
+function answerHtml({ sentence, cautions }: CaseHead["answers"][number]): string {
+  const [, first = sentence, rest = ""] = /^(.+?[.!?])\s+(?=\p{Lu})(.*)$/su.exec(sentence) ?? [];
+  const more = [...(rest === "" ? [] : [rest]), ...cautions.map((caution) => `Caution: ${caution}`)];
+  return [
+    `<p dir="auto">${escapeText(first)}</p>`,
+    ...more.map((text) => `<p class="rest" dir="auto">${escapeText(text)}</p>`),
   ].join("");
 }
 
@@ -62,7 +72,7 @@ function cellHtml(cell: ShownCell, title: string): string {
     source.trim() === ""
       ? ""
       : `<details class="code"><summary>Code${step}</summary><pre>${escapeText(source)}</pre></details>`;
-  return code + outputsHtml((cell.outputs ?? []).filter((output) => !opensCase(output)));
+  return code + outputsHtml((cell.outputs ?? []).filter((output) => !leftOut(output)));
 }
 
 /** A first heading that is the page's title, or begins with it ("Ferry loan: ..."), is not said twice. */
