@@ -3,10 +3,17 @@ import type { CompiledRule, Rule } from "../rule/index.js";
 import { type FitOptions, onLogScale } from "./fit-options.js";
 import type { FitRows } from "./fit-rows.js";
 import { inputsByPeriod } from "./inputs-by-period.js";
+import type { RecordedSteps } from "./one-step-system.js";
 import { recordedPairs } from "./recorded-pairs.js";
 import { slotsOf } from "./slots.js";
 import { place, type Unknowns } from "./unknowns.js";
 import { rootWeight, valueTable } from "./value-table.js";
+
+/** The pairs of a group as rows, and laid out for generated sums where every pair is one step apart. */
+export interface OneStepRows {
+  readonly rows: FitRows;
+  readonly steps: RecordedSteps | undefined;
+}
 
 /**
  * The rule is started afresh at every recorded value and compared with the next one; over a gap of k periods it is
@@ -18,7 +25,7 @@ export function oneStepRows(
   group: ObservedGroup,
   unknowns: Unknowns,
   options: FitOptions,
-): FitRows {
+): OneStepRows {
   const { from, to, spans, sources } = recordedPairs(rule, group);
   const slots = slotsOf(rule);
   const slotStates = Int32Array.from(slots, ({ state }) => rule.states.indexOf(state));
@@ -45,6 +52,18 @@ export function oneStepRows(
   let withRows = false;
   let fitted = 0;
   let ran = -1;
+  const steps = longest === 1 ? emptySteps(from, group, slots.length, inputs) : undefined;
+  const layOut = (): void => {
+    if (steps === undefined) return;
+    for (let k = 0; k < sources.length; k++)
+      steps.from[k] = values[sources[k]! * states + slotStates[k % slots.length]!]!;
+    for (let i = 0; i < observed.length; i++) {
+      const place = pairs[i]! * slots.length + cellStates[i]!;
+      steps.weights[place] = roots[i]!;
+      steps.observed[place] = log ? Math.log(observed[i]!) : observed[i]!;
+    }
+  };
+  layOut();
   const run = (pair: number): void => {
     ran = pair;
     for (let s = 0; s < start.length; s++)
@@ -54,7 +73,7 @@ export function oneStepRows(
       compiled.pathWithSensitivities(start, constants, inputs, period, spans[pair]!, path, sensitivities);
     else compiled.path(start, constants, inputs, period, spans[pair]!, path);
   };
-  return {
+  const rows: FitRows = {
     size,
     count: cells.length,
     row,
@@ -65,6 +84,7 @@ export function oneStepRows(
     take(given) {
       values.set(given);
       for (let i = 0; i < observed.length; i++) observed[i] = given[entries[i]! * states + cellStates[i]!]!;
+      layOut();
     },
     prepare(at, needRows) {
       place(unknowns, at);
@@ -84,6 +104,18 @@ export function oneStepRows(
     },
     fitted: () => fitted,
   };
+  return { rows, steps };
+}
+
+function emptySteps(
+  from: Int32Array,
+  group: ObservedGroup,
+  slots: number,
+  inputs: readonly Float64Array[],
+): RecordedSteps {
+  const table = (): Float64Array => new Float64Array(from.length * slots);
+  const periods = from.map((entry) => group.index[entry]!);
+  return { inputs, periods, from: table(), observed: table(), weights: table() };
 }
 
 /** The recorded values at the ends of pairs. */

@@ -5,6 +5,7 @@ import { type FitOptions, onLogScale } from "./fit-options.js";
 import type { FitRows } from "./fit-rows.js";
 import { normalEquations } from "./normal-equations.js";
 import { oneStepRows } from "./one-step-rows.js";
+import { oneStepSystem } from "./one-step-system.js";
 import { recordedPath } from "./recorded-path.js";
 import { trajectoryRows } from "./trajectory-rows.js";
 import { trajectorySystem } from "./trajectory-system.js";
@@ -25,8 +26,10 @@ export function prepared(
 ): Prepared {
   const compiled = compileRule(rule);
   if (options.errors === "process") {
-    const rows = oneStepRows(rule, compiled, group, unknowns, options);
-    return { rows, system: normalEquations(rows) };
+    const { rows, steps } = oneStepRows(rule, compiled, group, unknowns, options);
+    const generated = steps && compiled.stepSums?.(onLogScale(options));
+    const system = generated ? oneStepSystem(generated, unknowns, steps) : normalEquations(rows);
+    return { rows, system };
   }
   const recorded = recordedPath(rule, group, options);
   const rows = trajectoryRows(rule, compiled, unknowns, recorded);

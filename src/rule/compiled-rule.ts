@@ -49,9 +49,14 @@ export interface CompiledRule {
    * undefined where code is not generated or the unknowns are too many for it.
    */
   readonly pathSums: ((logarithmic: boolean) => PathSums) | undefined;
+  /** The same for single steps from recorded states. */
+  readonly stepSums: ((logarithmic: boolean) => StepSums) | undefined;
 }
 
-/** Moves paths first..last-1 one period on from t, in place. */
+/**
+ * Moves paths first..last-1 one period on from t, in place. limits [states, 2]: a path of which a state comes to lie
+ * below the first or above the second, or is not finite, ends: it is NaN from there on.
+ */
 export type Advance = (
   present: Float64Array,
   first: number,
@@ -59,6 +64,7 @@ export type Advance = (
   constants: Float64Array,
   inputs: readonly Float64Array[],
   t: number,
+  limits: Float64Array,
 ) => void;
 
 /**
@@ -73,6 +79,22 @@ export type PathSums = (
   inputs: readonly Float64Array[],
   from: number,
   periods: number,
+  observed: Float64Array,
+  weights: Float64Array,
+  sums: Float64Array,
+) => number;
+
+/**
+ * Takes one step from each of many recorded states and returns the sum of (weight * (observed - next state))^2, with its
+ * sums by the constants: J'J, upper triangle row after row, then J'r.
+ *
+ * periods [pairs]; from, observed and weights [pairs, states]; a weight of 0 leaves a value out. sums [m (m + 1)/2 + m].
+ */
+export type StepSums = (
+  constants: Float64Array,
+  inputs: readonly Float64Array[],
+  periods: Int32Array,
+  from: Float64Array,
   observed: Float64Array,
   weights: Float64Array,
   sums: Float64Array,

@@ -1,7 +1,7 @@
 export type { NamedClosedForm, NamedEquilibrium, NamedQuantity, NamedRule } from "./catalogue/named-rule.js";
 export { type RuleCatalogue, rules } from "./catalogue/rules.js";
 export { compileRule, interpretRule } from "./code/compile-rule.js";
-export type { CompiledRule, PathSums } from "./compiled-rule.js";
+export type { CompiledRule, PathSums, StepSums } from "./compiled-rule.js";
 export { encloseStep, type HeldValues, type StepEnclosure } from "./enclose-step.js";
 export { eventOrder } from "./event-order.js";
 export { explainFailure, type StepFailure, type StepPlace } from "./explain-failure.js";

@@ -13,11 +13,11 @@ import { compiledInC, leastMicroseconds } from "./time-in-c.js";
 
 const paths = 10_000;
 const periods = 1_000;
-const compiled = compileRule(recurrence("ΔN = r*N*(1 - N/K)"));
+const compiled = compileRule(recurrence("x[t+1] = r*x*(1 - x)"));
 const values = new Float64Array(1_000_001);
 
 function onePath(): void {
-  compiled.path(Float64Array.of(10), Float64Array.of(2.9, 1000), [], 0, 1_000_000, values);
+  compiled.path(Float64Array.of(0.3), Float64Array.of(3.7), [], 0, 1_000_000, values);
 }
 
 function manyPaths(sd: number): void {
@@ -29,7 +29,7 @@ function manyPaths(sd: number): void {
     inputs: [],
     from: 0,
     periods,
-    starts: { paths, size: 2, constants: Float64Array.of(0.5, 1000), initial: Float64Array.of(10) },
+    starts: { paths, size: 1, constants: Float64Array.of(1.5), initial: Float64Array.of(0.3) },
     change,
     reading: [undefined],
     limits: [[Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY]],

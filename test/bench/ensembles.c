@@ -1,4 +1,4 @@
-/* Hand-written ensembles of N' = N + r N (1 - N/K): one path, many without noise, many with a lognormal factor. */
+/* Hand-written ensembles of x' = r x (1 - x): one path, many without noise, many with a lognormal factor. */
 #include <math.h>
 #include <stdint.h>
 #include <stdio.h>
@@ -45,8 +45,8 @@ static double normal(void) {
 }
 
 int main(void) {
-  const int paths = 10000, periods = 1000, rounds = 5;
-  const double r = 0.5, K = 1000, area = 0.00492867323399, sd = 0.1;
+  const int paths = 10000, periods = 1000, rounds = 15;
+  const double r = 1.5, area = 0.00492867323399, sd = 0.1;
   edge[1] = 3.6541528853610088;
   height[1] = exp(-0.5 * edge[1] * edge[1]);
   edge[0] = area / height[1];
@@ -57,21 +57,21 @@ int main(void) {
   }
   double *x = malloc(paths * sizeof(double)), least[3] = {1e9, 1e9, 1e9}, sink = 0;
   for (int round = 0; round < rounds; round++) {
-    double from = now(), N = 10 + round;
-    for (int t = 0; t < 1000000; t++) N = N + 2.9 * N * (1 - N / K);
+    double from = now(), N = 0.3 + 0.01 * round;
+    for (int t = 0; t < 1000000; t++) N = 3.7 * N * (1 - N);
     sink += N;
     least[0] = fmin(least[0], now() - from);
-    for (int i = 0; i < paths; i++) x[i] = 10;
+    for (int i = 0; i < paths; i++) x[i] = 0.3;
     from = now();
     for (int t = 0; t < periods; t++)
-      for (int i = 0; i < paths; i++) x[i] = x[i] + r * x[i] * (1 - x[i] / K);
+      for (int i = 0; i < paths; i++) x[i] = r * x[i] * (1 - x[i]);
     sink += x[7];
     least[1] = fmin(least[1], now() - from);
-    for (int i = 0; i < paths; i++) x[i] = 10;
+    for (int i = 0; i < paths; i++) x[i] = 0.3;
     from = now();
     for (int t = 0; t < periods; t++)
       for (int i = 0; i < paths; i++)
-        x[i] = (x[i] + r * x[i] * (1 - x[i] / K)) * exp(-0.5 * sd * sd + sd * normal());
+        x[i] = r * x[i] * (1 - x[i]) * exp(-0.5 * sd * sd + sd * normal());
     sink += x[7];
     least[2] = fmin(least[2], now() - from);
   }

@@ -1,10 +1,11 @@
-import type { Advance, CompiledRule, PathSums } from "../compiled-rule.js";
+import type { Advance, CompiledRule, PathSums, StepSums } from "../compiled-rule.js";
 import { modulo, roundTo } from "../graph/operations.js";
 import type { RuleGraph } from "../graph/rule-graph.js";
 import { advanceSource } from "./advance-source.js";
 import { interpretGraph } from "./interpret-graph.js";
 import { pathSource, stepSource } from "./path-source.js";
 import { sensitivitySource } from "./sensitivity-source.js";
+import { stepSumsSource } from "./step-sums-source.js";
 import { sumsSource } from "./sums-source.js";
 
 /** Wider sensitivity tables would fill the registers' spill space many times over; a plain loop serves them. */
@@ -64,11 +65,23 @@ export function generateRule(rule: RuleGraph): CompiledRule {
   ) as [() => PathSums, () => PathSums];
   const [advance, advanceEach] = [true, false].map((shared) =>
     late(() =>
-      makeFunction<Advance>("present, first, last, constants, inputs, t", advanceSource(rule, shared)),
+      makeFunction<Advance>(
+        "present, first, last, constants, inputs, t, limits",
+        advanceSource(rule, shared),
+      ),
     ),
   ) as [() => Advance, () => Advance];
+  const [plainSteps, logSteps] = [false, true].map((logarithmic) =>
+    late(() =>
+      makeFunction<StepSums>(
+        "constants, inputs, periods, from, observed, weights, sums",
+        stepSumsSource(rule, logarithmic),
+      ),
+    ),
+  ) as [() => StepSums, () => StepSums];
   const summed = rule.states + rule.constants <= mostSummed;
   return {
+    stepSums: summed ? (logarithmic) => (logarithmic ? logSteps() : plainSteps()) : undefined,
     pathSums: summed ? (logarithmic) => (logarithmic ? logSums() : plainSums()) : undefined,
     get advance() {
       return advance();

@@ -45,15 +45,21 @@ export function interpretGraph(rule: RuleGraph): CompiledRule {
     advanceEach: interpretAdvance(rule, step, false),
     pathWithSensitivities: interpretSensitivities(rule),
     pathSums: undefined,
+    stepSums: undefined,
   };
 }
 
 function interpretAdvance(rule: RuleGraph, step: CompiledRule["step"], shared: boolean): Advance {
-  return (present, first, last, constants, inputs, t) => {
+  const outside = (state: Float64Array, limits: Float64Array): boolean =>
+    state
+      .subarray(0, rule.observed)
+      .some((value, i) => !(value >= limits[2 * i]! && value <= limits[2 * i + 1]!));
+  return (present, first, last, constants, inputs, t, limits) => {
     for (let path = first; path < last; path++) {
       const state = present.subarray(path * rule.states, (path + 1) * rule.states);
       const from = shared ? 0 : path * rule.constants;
       step(state, constants.subarray(from, from + rule.constants), inputs, t, state);
+      if (outside(state, limits)) state.fill(Number.NaN);
     }
   };
 }
