@@ -109,6 +109,7 @@ export {
 } from "./commands/dynamics.js";
 export { type Explanation, explain } from "./commands/explain.js";
 export { fit } from "./commands/fits.js";
+export { expanding, fill, longer, regroup, rolling, shift, wider } from "./commands/frames.js";
 export { forecast, simulate } from "./commands/projections.js";
 export { propose } from "./commands/proposals.js";
 export {
