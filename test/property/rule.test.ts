@@ -67,17 +67,19 @@ test("many paths abreast take the same steps as each alone", () => {
         Float64Array.from(rule.constants, (name) => k * (name === "r" ? r : K)),
       );
       const states3 = own.map((_, k) => Float64Array.from(start.slice(0, width), (value) => value + 0.1 * k));
+      const limits = Float64Array.of(-100, 100, -100, 100);
       const flat = (rows: readonly Float64Array[]): Float64Array =>
         Float64Array.from(rows.flatMap((row) => [...row]));
       for (const compiled of [compileRule(rule), interpretRule(rule)]) {
         const each = flat(states3);
-        compiled.advanceEach(each, 0, 3, flat(own), inputs, 1);
+        compiled.advanceEach(each, 0, 3, flat(own), inputs, 1, limits);
         const shared = flat(states3);
-        compiled.advance(shared, 1, 3, own[0]!, inputs, 1);
+        compiled.advance(shared, 1, 3, own[0]!, inputs, 1, limits);
         const alone = (k: number, constants: Float64Array): Float64Array => {
           const next = new Float64Array(width);
           compileRule(rule).step(states3[k]!, constants, inputs, 1, next);
-          return next;
+          const outside = next.subarray(0, 2).some((value) => !(Math.abs(value) <= 100));
+          return outside ? next.fill(Number.NaN) : next;
         };
         expect(each).toEqual(flat([0, 1, 2].map((k) => alone(k, own[k]!))));
         expect(shared).toEqual(flat([states3[0]!, alone(1, own[0]!), alone(2, own[0]!)]));

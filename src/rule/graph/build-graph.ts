@@ -90,6 +90,7 @@ export function buildGraph(rule: CheckedRule): RuleGraph {
     ],
     quantities: rule.quantities.map((name) => quantities.get(name)!),
     states: rule.states.length + memory.length,
+    observed: rule.states.length,
     constants: rule.constants.length,
     inputs: rule.inputs.length,
   };

@@ -8,7 +8,10 @@ export interface RuleGraph {
   readonly next: readonly Node[];
   /** One a quantity, in event order. */
   readonly quantities: readonly Node[];
+  /** Length of the state vector. */
   readonly states: number;
+  /** How many of its slots are states; the others are kept past values. */
+  readonly observed: number;
   readonly constants: number;
   readonly inputs: number;
 }
