@@ -1,3 +1,4 @@
+import { createRequire } from "node:module";
 import { join } from "node:path";
 import type { Arguments } from "./arguments.js";
 
@@ -16,7 +17,10 @@ periodwise start [notebook...]           the same, for every notebook of this ch
 export const commands: Readonly<Record<string, Command>> = {
   kernel: async ({ words: [connectionFile] }) => {
     if (connectionFile === undefined) throw missing("connection file", "periodwise kernel <connection file>");
-    const { runKernel } = await import("../kernel/index.js");
+    // Node's loader for import() takes longer to start than this one.
+    const { runKernel } = createRequire(__filename)(
+      "../kernel/index.js",
+    ) as typeof import("../kernel/index.js");
     runKernel(connectionFile, async () => {
       const [{ ruleText }, { tradeTerms }] = await Promise.all([
         import("./rule-text.js"),
@@ -42,6 +46,8 @@ export const commands: Readonly<Record<string, Command>> = {
     const data = dataFolder(options["prefix"], process.env, process.platform);
     const folder = installSpecification(data, [process.execPath, program, "kernel"]);
     console.log(`Installed the kernel specification in ${folder}.`);
+    const { warmUp } = await import("../kernel/index.js");
+    warmUp(process.cwd());
     return 0;
   },
   remove: async ({ options }) => {

@@ -1,5 +1,6 @@
 export { type Initialiser, initialisers } from "./cells/initialisers.js";
 export { installationFolder } from "./cells/installation.js";
+export { warmUp } from "./cells/warm-up.js";
 export { KernelError } from "./kernel-error.js";
 export type { StringComplaint, StringCompletion, StringLanguage } from "./language/string-language.js";
 export type { MimeBundle } from "./mime-bundle.js";

@@ -18,7 +18,7 @@ import type { Outlet } from "./transport/port-messages.js";
 import { startTransport } from "./transport/start-transport.js";
 
 /** When the first cells have run, what was compiled for them is worth keeping for the next start. */
-const keepAfterMs = 15_000;
+const keepAfterMs = 6_000;
 /** Loaded sooner by the first cell that has a string. */
 const languagesAfterMs = 1_000;
 
