@@ -4,10 +4,13 @@ import { type Bundle, type Column, type Table, table } from "../tables/index.js"
 import { countsSentence, findingsList, periodSentence } from "./findings-list.js";
 import { shownTogether } from "./shown-together.js";
 
+/** Pairs listed; the table says how many there are. */
+const listedPairs = 12;
+
 /** Shows differences: every pair, the change against the value it starts from, and what was found. */
 export function differencesBundle(differences: Differences): Promise<Bundle> {
   const findings = findingsList(differences.observations.findings);
-  return shownTogether([pairsTable(differences), ...changeFigures(differences), findings]);
+  return shownTogether([findings, pairsTable(differences), ...changeFigures(differences)]);
 }
 
 function pairsTable(differences: Differences): Table {
@@ -38,6 +41,7 @@ function pairsTable(differences: Differences): Table {
       { ...number("perHead", "Change per value"), digits: 5 },
       ...(plain ? [] : [number("difference", "Difference", per === "step" ? unit : "")]),
     ],
+    limit: listedPairs,
     rows: series.flatMap((pairs) => Array.from(pairs.index.keys(), (i) => pairRow(pairs, i))),
     notes: [
       periodSentence(observations),

@@ -10,7 +10,7 @@ const drawn = 12;
 /** Shows a record: one line a series, the raw values with flagged rows marked, and what was found. */
 export function observationsBundle(observations: Observations): Promise<Bundle> {
   const findings = findingsList(observations.findings);
-  return shownTogether([seriesTable(observations), ...recordFigures(observations), findings]);
+  return shownTogether([seriesTable(observations), findings, ...recordFigures(observations)]);
 }
 
 function seriesTable(observations: Observations): Table {

@@ -25,7 +25,9 @@ export function numberColumn(column: Column, name: string, signs = false): Numbe
   const sides = signs ? column.map(sideOfLimit) : [];
   for (let i = 0; i < column.length; i++) {
     const cell = column[i];
-    values[i] = numberOf(sides[i] ? String(cell).trim().slice(1) : cell, i + 1, name);
+    const read = numberOf(sides[i] ? String(cell).trim().slice(1) : cell);
+    if (read === undefined) throw refusalOf(column, i, name);
+    values[i] = read;
   }
   return { values, censoring: sides.some((side) => side !== 0) ? Int8Array.from(sides) : undefined };
 }
@@ -35,14 +37,21 @@ function sideOfLimit(cell: unknown): number {
   return cell.trim().startsWith("<") ? -1 : 1;
 }
 
-function numberOf(cell: unknown, row: number, name: string): number {
+/** NaN of an empty cell; undefined of what is no number. */
+function numberOf(cell: unknown): number | undefined {
   if (typeof cell === "number" && Number.isFinite(cell)) return cell;
   if (isEmpty(cell)) return Number.NaN;
   if (typeof cell === "bigint") return Number(cell);
   if (typeof cell === "boolean") return cell ? 1 : 0;
-  if (typeof cell === "string" && plainNumber.test(cell.trim())) return Number(cell);
-  if (typeof cell === "string" && withSeparators.test(cell.trim())) throw decimalSignUnclear(row, name, cell);
-  throw notANumber(row, name, cell, remedyFor(cell));
+  return typeof cell === "string" && plainNumber.test(cell.trim()) ? Number(cell) : undefined;
+}
+
+/** Of a column with unread cells the one to name: a cell that is no number by any decimal sign goes before others. */
+function refusalOf(column: readonly unknown[], first: number, name: string): Error {
+  const separated = (cell: unknown): boolean => typeof cell === "string" && withSeparators.test(cell.trim());
+  const bad = column.findIndex((cell) => numberOf(cell) === undefined && !separated(cell));
+  if (bad >= 0) return notANumber(bad + 1, name, column[bad], remedyFor(column[bad]));
+  return decimalSignUnclear(first + 1, name, String(column[first]));
 }
 
 function refuseInfinite(values: Float64Array, name: string): Float64Array {

@@ -1,4 +1,4 @@
-import type { Column } from "../record/index.js";
+import { type Column, packed } from "../record/index.js";
 import { type DateOrder, dateOrdersOf, isoDate, plainDate } from "./date-form.js";
 import { decimalSignOf, isNegative, writtenNumber } from "./number-form.js";
 import type { ReadOptions } from "./read-options.js";
@@ -16,8 +16,12 @@ export interface TypedColumns {
   readonly found: readonly string[];
 }
 
+/** A column with this share of written numbers is one of numbers, and its other cells are what is wrong with it. */
+const mostly = 0.8;
+
 /**
- * Reads the numbers and dates of text columns. A column is one of numbers only when every cell in it is.
+ * Reads the numbers and dates of text columns. In a column of numbers a cell that writes none stays the text it
+ * is, so that whoever needs a number there can be told its row.
  *
  * @throws {ModelError} `decimal-sign-unclear` | `ambiguous-date` | `mixed-dates`: what cannot be told is asked.
  */
@@ -26,25 +30,32 @@ export function typedColumns(
   delimiter: string,
   options: ReadOptions,
 ): TypedColumns {
-  const numbers = texts.filter(({ cells }) => allOf(cells, (cell) => decimalSignOf(cell) !== undefined));
+  const numbers = texts.filter(({ cells }) => isOfNumbers(cells));
   const decimal = options.decimal ?? decimalOf(numbers, delimiter);
   const found: string[] = [];
   if (decimal === ",") found.push("Numbers are read with a decimal comma.");
   const columns = texts.map((text): Column => {
-    if (numbers.includes(text)) return numbersOf(text, decimal, found) ?? text.cells;
+    if (numbers.includes(text)) return numbersOf(text, decimal, found);
     return options.dates === "text" ? text.cells : (datesOf(text, options.dates, found) ?? text.cells);
   });
   return { columns, found };
 }
 
-function allOf(cells: readonly (string | null)[], holds: (cell: string) => boolean): boolean {
-  let any = false;
+/** Codes with leading zeros or too many digits make a column one of codes, whatever else stands in it. */
+function isOfNumbers(cells: readonly (string | null)[]): boolean {
+  let [numbers, others] = [0, 0];
   for (const cell of cells) {
     if (cell === null || cell.trim() === "") continue;
-    if (!holds(cell)) return false;
-    any = true;
+    if (decimalSignOf(cell) !== undefined) numbers++;
+    else if (/^\d+$/.test(cell.trim())) return false;
+    else others++;
   }
-  return any;
+  return numbers > 0 && numbers >= mostly * (numbers + others);
+}
+
+function allOf(cells: readonly (string | null)[], holds: (cell: string) => boolean): boolean {
+  const written = cells.filter((cell): cell is string => cell !== null && cell.trim() !== "");
+  return written.length > 0 && written.every(holds);
 }
 
 /** The one decimal sign that the number columns of a file use. */
@@ -80,25 +91,28 @@ function* signedCells(columns: readonly TextColumn[]): Generator<SignedCell> {
   }
 }
 
-function numbersOf(text: TextColumn, decimal: "." | ",", found: string[]): Float64Array | undefined {
-  const values = new Float64Array(text.cells.length);
+function numbersOf(text: TextColumn, decimal: "." | ",", found: string[]): Column {
   let credits = 0;
-  for (let i = 0; i < values.length; i++) {
-    const cell = text.cells[i];
-    if (cell === null || cell === undefined || cell.trim() === "") {
-      values[i] = Number.NaN;
-      continue;
-    }
+  const bad: number[] = [];
+  const cells = text.cells.map((cell, i) => {
+    if (cell === null || cell.trim() === "") return null;
     const value = writtenNumber(cell, decimal);
-    if (value === undefined) return undefined;
-    if (value < 0 && !/^[-\u2212]/.test(cell.trim()) && isNegative(cell)) credits++;
-    values[i] = value;
-  }
+    if (value === undefined) bad.push(i);
+    else if (value < 0 && !/^[-\u2212]/.test(cell.trim()) && isNegative(cell)) credits++;
+    return value ?? cell;
+  });
   if (credits > 0)
     found.push(
       `In "${text.name}" ${credits} amounts in brackets or with a minus behind are read as negative.`,
     );
-  return values;
+  if (bad.length > 0) found.push(notNumbers(text, bad));
+  return packed(cells);
+}
+
+function notNumbers({ name, cells }: TextColumn, bad: readonly number[]): string {
+  const [first] = bad;
+  const more = bad.length > 1 ? ` and ${bad.length - 1} more` : "";
+  return `"${name}" is a column of numbers, but row ${first! + 1} holds "${cells[first!]}"${more}: kept as text.`;
 }
 
 function datesOf(

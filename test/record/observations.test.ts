@@ -21,7 +21,7 @@ describe("observations", () => {
     expect(counts.findings.map(({ kind }) => kind)).toEqual(["gap", "mixed-steps"]);
     expect(counts.findings[0]!.message).toBe("Row 3: hours 60 follows 36; one period is missing.");
     expect(counts.findings[1]!.message).toBe(
-      "Steps of 12, 24 hour occur: the rule is applied per 12 hour; 1 of 2 steps.",
+      "Steps of 12 and 24 hours occur: the rule is applied per 12 hours; 1 pair spans 2 steps.",
     );
     expect(counts.counts).toEqual({ read: 3, used: 3, flagged: 1, corrected: 0, refused: 0 });
   });
@@ -76,10 +76,49 @@ describe("observations", () => {
         "decimal-sign-unclear: Row 2, density: "1.234,56" - decimal sign unclear; choose comma or point. Read the file with decimal: "," or decimal: ".".",
         "duplicate-period: hours 12 appears 2 times, at rows 2 and 3, with different values (2, 3). Possible duplicate - keep both? Say duplicates: "average", "first", "last" or "sum", or name the replicates column.",
         "not-increasing: Times are not increasing at row 3: hours 6 follows 12. If several series are mixed, name the column that tells them apart with by. To put the rows in order, say disorder: "sort".",
-        "off-step: Row 3, hours: 29 lies 2.41667 steps of 12 hour after the first row, not a whole number of steps. Choose a step that divides the periods, or say offStep: "nearest".",
-        "step-missing: The length of one step is not stated, and no length is assumed. The closest rows lie 12 apart in "hours": say for example step: { every: 1, of: "hour" } or step: "month-end".",
+        "off-step: Row 3, hours: 29 lies 2.41667 steps of 12 hours after the first row, not a whole number of steps. Choose a step that divides the periods, or say offStep: "nearest".",
+        "step-missing: The length of one step is not stated, and no length is assumed. The closest rows lie 12 apart in "hours": say step: { every: 12, of: "hour" } if that is one step.",
         "ambiguous-date: Row 1, day: "03/04/2025" - ambiguous date. Write dates as 2026-03-31, or read the file with dates: "day-month-year" or dates: "month-day-year".",
       ]
     `);
+  });
+
+  test("asks for a forgotten step with the one that fits the record", () => {
+    const asked = (period: unknown[]) => {
+      const { message } = refusalOf(() =>
+        observations(tableOf({ at: period, v: period.map((_, i) => i) }), { period: "at", value: "v" }),
+      );
+      return message.slice(message.indexOf("The closest"));
+    };
+    expect([
+      asked(["2026-01-31", "2026-02-28", "2026-03-31"]),
+      asked(["2026-01-15", "2026-02-15"]),
+      asked(["2024-06-01", "2025-06-01"]),
+      asked(["2026-01-05", "2026-01-12"]),
+      asked(["2026-01-05", "2026-01-06"]),
+      asked(["2026-01-05 09:00", "2026-01-05 09:30"]),
+      asked(["2026-01-05 09:00", "2026-01-05 15:00"]),
+      asked([0, 0.5, 1.5]),
+    ]).toMatchInlineSnapshot(`
+      [
+        "The closest rows lie one month apart in "at": say step: "month-end" if that is one step.",
+        "The closest rows lie one month apart in "at": say step: "month" if that is one step.",
+        "The closest rows lie one year apart in "at": say step: "year" if that is one step.",
+        "The closest rows lie one week apart in "at": say step: "week" if that is one step.",
+        "The closest rows lie one day apart in "at": say step: "day" if that is one step.",
+        "The closest rows lie one year apart in "at": say step: "year" if that is one step.",
+        "The closest rows lie one year apart in "at": say step: "year" if that is one step.",
+        "The closest rows lie 0.5 apart in "at": say step: { every: 0.5, of: "at" } if that is one step.",
+      ]
+    `);
+  });
+
+  test("names the one bad cell of a column of numbers, whatever their decimal sign", () => {
+    const text = { hours: [0, 12, 24], density: ["240,0", "15O,2", "160,1"] };
+    expect(() => observations(tableOf(text), hours)).toThrow('Row 2, density: "15O,2" is not a number.');
+    const mixed = { hours: [0, 12, 24], density: [240, "n/a", 160.1] };
+    expect(() => observations(tableOf(mixed), hours)).toThrow(
+      'Row 2, density: "n/a" is not a number. If it marks a missing value, read the file with missing: ["n/a"]',
+    );
   });
 });

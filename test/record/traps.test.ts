@@ -180,7 +180,7 @@ describe("culture records", () => {
       ["off-step", 4],
     ]);
     expect(() => messages({ hours: [0, 0.7], stock: [1, 2] }, hourly)).toThrow(
-      "0.7 lies 1.4 steps of 0.5 hour after the first row",
+      "0.7 lies 1.4 steps of 0.5 hours after the first row",
     );
     expect(
       Array.from(
@@ -258,7 +258,7 @@ describe("in every domain", () => {
     expect(messages({ week: [1, 3, 5], stock: [5, 6, 7] })).toEqual([
       "gap: Row 2: week 3 follows 1; one period is missing. [used as a 2-step pair]",
       "gap: Row 3: week 5 follows 3; one period is missing. [used as a 2-step pair]",
-      "no-single-step: No two rows lie one step (1 week) apart; the closest lie 2 steps (2 week) apart. [used as multi-step pairs]",
+      "no-single-step: No two rows lie one step (1 week) apart; the closest lie 2 steps (2 weeks) apart. [used as multi-step pairs]",
     ]);
   });
 
@@ -271,7 +271,7 @@ describe("in every domain", () => {
       value: "stock",
     }).findings;
     expect(found.at(-1)!.message).toBe(
-      "Steps of 0.5, 1 hour occur: the rule is applied per 0.5 hour; 3 of 2 steps.",
+      "Steps of 0.5 and 1 hours occur: the rule is applied per 0.5 hours; 3 pairs span 2 steps.",
     );
   });
 

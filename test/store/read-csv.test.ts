@@ -135,6 +135,16 @@ describe("a delimited file", () => {
     expect(await columns("date,owed\n3 Apr 2025,1\n", {})).toEqual({ date: ["2025-04-03"], owed: [1] });
   });
 
+  test("keeps the one cell of a column of numbers that is none, and says where it is", async () => {
+    const rows = Array.from({ length: 9 }, (_, i) => `${i};${i},5`);
+    const table = await read(`week;coils\n${rows.join("\n")}\n9;15O,2\n`);
+    expect(Array.from(table.columns[1]!)).toEqual([0.5, 1.5, 2.5, 3.5, 4.5, 5.5, 6.5, 7.5, 8.5, "15O,2"]);
+    expect(table.source.found).toEqual([
+      "Numbers are read with a decimal comma.",
+      '"coils" is a column of numbers, but row 10 holds "15O,2": kept as text.',
+    ]);
+  });
+
   test("leaves codes as text: leading zeros and more digits than a number keeps", async () => {
     expect(await columns("item,id\n007,12345678901234567\n012,2\n")).toEqual({
       item: ["007", "012"],

@@ -1,6 +1,7 @@
 import type { FindingLog } from "../finding-log.js";
 import type { ObservedGroup } from "../observations.js";
 import type { PeriodAxis } from "./period-axis.js";
+import { listText, unitText } from "./unit-text.js";
 import { stepText } from "./whole-steps.js";
 
 /** Notes gaps row by row, and once for the record which lengths of step occur besides the single one. */
@@ -71,7 +72,7 @@ function noteShortStep(shortest: number, axis: PeriodAxis, log: FindingLog): voi
   wholeRecord(
     "no-single-step",
     axis,
-    `No two rows lie one step (${stepText(axis)}) apart; the closest lie ${shortest} steps (${shortest * every} ${of}) apart.`,
+    `No two rows lie one step (${stepText(axis)}) apart; the closest lie ${shortest} steps (${unitText(shortest * every, of)}) apart.`,
     "used as multi-step pairs",
     log,
   );
@@ -84,13 +85,17 @@ function noteMixed(
   log: FindingLog,
 ): void {
   const { every, of } = axis.calendar.step;
-  const told = lengths.slice(1, 6).map((steps) => `${counts.get(steps)} of ${steps} steps`);
-  const occur = lengths.slice(0, 6).map((steps) => Number((steps * every).toPrecision(12)));
-  const more = lengths.length > 6 ? " and longer" : "";
+  const most = 6;
+  const more = lengths.length > most ? " and longer" : "";
+  const occur = lengths.slice(0, most).map((steps) => Number((steps * every).toPrecision(12)));
+  const told = lengths.slice(lengths[0] === 1 ? 1 : 0, most).map((steps) => {
+    const pairs = counts.get(steps)!;
+    return `${pairs} ${pairs === 1 ? "pair spans" : "pairs span"} ${steps} steps`;
+  });
   wholeRecord(
     "mixed-steps",
     axis,
-    `Steps of ${occur.join(", ")}${more} ${of} occur: the rule is applied per ${stepText(axis)}; ${told.join(", ")}${more}.`,
+    `Steps of ${listText(occur)} ${unitText(2, of).slice(2)}${more} occur: the rule is applied per ${stepText(axis)}; ${listText(told)}.`,
     "longer ones used as multi-step pairs",
     log,
   );

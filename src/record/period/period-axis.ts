@@ -5,6 +5,7 @@ import { optionWrong } from "../refusals.js";
 import { type Calendar, type CalendarName, calendarNamed, calendarNames, everyUnit } from "./calendar.js";
 import { type Moment, momentOf } from "./calendar-date.js";
 import { ambiguousDate, noPeriod, noSuchPeriod, stepMissing } from "./refusals.js";
+import { suggestedStep } from "./suggested-step.js";
 
 /** Where the rows of a record lie on its axis of periods. */
 export interface PeriodAxis {
@@ -35,7 +36,7 @@ export function periodAxis(
 ): PeriodAxis {
   if (typeof period !== "string") return axisOfPair(table, period, calendarOf(step));
   const column = columnNamed(table, period, "the period");
-  if (step === undefined) throw stepMissing(period, closestRows(column, period));
+  if (step === undefined) throw stepMissing(period, ...suggestedStep(column, period, holdsDates(column)));
   const calendar = calendarOf(step);
   return holdsDates(column) ? axisOfDates(column, period, calendar) : axisOfNumbers(column, period, calendar);
 }
@@ -126,20 +127,4 @@ function fromEarliest(position: Float64Array, calendar: Calendar): Float64Array 
 
 function dateText(cell: unknown): string {
   return cell instanceof Date ? cell.toISOString().slice(0, 16).replace("T", " ") : String(cell);
-}
-
-function closestRows(column: Column, name: string): string {
-  const dates = holdsDates(column);
-  const at = dates
-    ? Float64Array.from(column, (cell) => momentOf(cell) ?? Number.NaN)
-    : numberColumn(column, name).values;
-  let closest = Number.POSITIVE_INFINITY;
-  for (let row = 1; row < at.length; row++) {
-    const apart = Math.abs(at[row]! - at[row - 1]!);
-    if (apart > 0 && apart < closest) closest = apart;
-  }
-  if (closest === Number.POSITIVE_INFINITY) return "nothing";
-  return dates
-    ? `${Number((closest / 3_600_000).toPrecision(6))} hours`
-    : String(Number(closest.toPrecision(6)));
 }

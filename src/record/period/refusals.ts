@@ -19,12 +19,12 @@ export function offStep(row: number, column: string, value: string, steps: numbe
   );
 }
 
-export function stepMissing(column: string, closest: string): ModelError {
+export function stepMissing(column: string, closest: string, suggested: string): ModelError {
   return new ModelError(
     "step-missing",
     `The length of one step is not stated, and no length is assumed. The closest rows lie ${closest} apart in "${column}": ` +
-      'say for example step: { every: 1, of: "hour" } or step: "month-end".',
-    { column, closest },
+      `say step: ${suggested} if that is one step.`,
+    { column, closest, suggested },
   );
 }
 

@@ -1,6 +1,7 @@
 import type { FindingLog } from "../finding-log.js";
 import type { PeriodAxis } from "./period-axis.js";
 import { offStep } from "./refusals.js";
+import { unitText } from "./unit-text.js";
 
 /** Off by less than this part of a step is a matter of rounding in the record, not of timing. */
 const rounding = 1e-6;
@@ -36,7 +37,7 @@ export function wholeSteps(
 
 export function stepText(axis: PeriodAxis): string {
   const { every, of } = axis.calendar.step;
-  return `${every} ${of}`;
+  return unitText(every, of);
 }
 
 function noteOffStep(row: number, off: number, axis: PeriodAxis, log: FindingLog): void {

@@ -1,0 +1,53 @@
+import type { Column } from "../column-table.js";
+import { numberColumn } from "../number-column.js";
+import { singular } from "./calendar.js";
+import { dayLength, isMonthEnd, momentOf, monthNumber } from "./calendar-date.js";
+import { unitText } from "./unit-text.js";
+
+/**
+ * How far apart the closest rows lie, in words, and the option that would fit them: for an error that asks, never
+ * taken unasked.
+ */
+export function suggestedStep(column: Column, name: string, isDated: boolean): readonly [string, string] {
+  return isDated ? ofDates(column) : ofNumbers(column, name);
+}
+
+function ofDates(column: Column): readonly [string, string] {
+  const moments = Array.from<unknown>(column).flatMap((cell) => momentOf(cell) ?? []);
+  const closest = closestOf(moments);
+  const fits: readonly (readonly [boolean, string, string])[] = [
+    [moments.every(isMonthEnd), "one month", '"month-end"'],
+    [sameDay(moments) && closestOf(moments.map(monthNumber)) >= 12, "one year", '"year"'],
+    [sameDay(moments) && closestOf(moments.map(monthNumber)) >= 1, "one month", '"month"'],
+    [closest === 7 * dayLength, "one week", '"week"'],
+    [closest === dayLength, "one day", '"day"'],
+    [closest === dayLength / 48, "half an hour", '"half-hour"'],
+  ];
+  const fit = fits.find(([holds]) => holds);
+  if (fit !== undefined) return [fit[1], fit[2]];
+  const days = closest / dayLength;
+  const [every, of] = Number.isInteger(days) ? [days, "day"] : [Number((days * 24).toPrecision(6)), "hour"];
+  return [unitText(every, of), `{ every: ${every}, of: "${of}" }`];
+}
+
+/** Whether every date is of the same day of its month, one of those that every month has. */
+function sameDay(moments: readonly number[]): boolean {
+  const days = new Set(moments.map((moment) => new Date(moment).getUTCDate()));
+  return days.size === 1 && [...days][0]! <= 28;
+}
+
+function ofNumbers(column: Column, name: string): readonly [string, string] {
+  const closest = Number(closestOf(Array.from(numberColumn(column, name).values)).toPrecision(6));
+  return [String(closest), `{ every: ${closest}, of: ${JSON.stringify(singular(name))} }`];
+}
+
+/** Smallest distance between neighbours that differ; 1 where there is none. */
+function closestOf(places: readonly number[]): number {
+  const apart = places.slice(1).map((place, i) => Math.abs(place - places[i]!));
+  return (
+    apart.reduce(
+      (least, distance) => (distance > 0 && distance < least ? distance : least),
+      Number.POSITIVE_INFINITY,
+    ) || 1
+  );
+}
