@@ -92,21 +92,21 @@ function endedOf(values: Float64Array): number {
   return count;
 }
 
-/** Mean and standard deviation of the numbers among the values. */
+/** Mean and standard deviation of the numbers among the values, in two passes. */
 function momentsOf(values: Float64Array): { mean: number; standardDeviation: number } {
   let count = 0;
-  let mean = 0;
-  let squares = 0;
+  let sum = 0;
   for (let i = 0; i < values.length; i++) {
     const value = values[i]!;
     if (Number.isNaN(value)) continue;
     count++;
-    const step = value - mean;
-    mean += step / count;
-    squares += step * (value - mean);
+    sum += value;
   }
-  return {
-    mean: count === 0 ? Number.NaN : mean,
-    standardDeviation: count < 2 ? Number.NaN : Math.sqrt(squares / (count - 1)),
-  };
+  const mean = sum / count;
+  let squares = 0;
+  for (let i = 0; i < values.length; i++) {
+    const off = values[i]! - mean;
+    if (!Number.isNaN(off)) squares += off * off;
+  }
+  return { mean, standardDeviation: count < 2 ? Number.NaN : Math.sqrt(squares / (count - 1)) };
 }

@@ -21,8 +21,10 @@ export interface Predictability {
 /** Periods that are let pass before the exponent is taken, and over which it is taken. */
 const settling = 200;
 const length = 400;
-/** Drawn constants that are looked at. */
+/** Drawn constants that are looked at first, and how many where one of those comes near to parting. */
+const firstLooks = 40;
 const looks = 200;
+const near = -0.05;
 
 interface LongRun {
   readonly exponent: number;
@@ -48,7 +50,9 @@ export function predictabilityOf(
 ): Predictability {
   const follow = follower(compiled, width, central.size);
   const own = follow(central, 0);
-  const runs = Array.from({ length: Math.min(looks, drawn.paths) }, (_, path) => follow(drawn, path));
+  const runs = Array.from({ length: Math.min(firstLooks, drawn.paths) }, (_, path) => follow(drawn, path));
+  if (runs.some((run) => run.exponent > near))
+    for (let path = firstLooks; path < Math.min(looks, drawn.paths); path++) runs.push(follow(drawn, path));
   const exponents = Float64Array.from(runs, (run) => run.exponent).sort();
   const wild = runs.filter(isChaotic);
   const chaotic = wild.length / runs.length;
