@@ -106,9 +106,9 @@ describe("observations", () => {
         "The closest rows lie one year apart in "at": say step: "year" if that is one step.",
         "The closest rows lie one week apart in "at": say step: "week" if that is one step.",
         "The closest rows lie one day apart in "at": say step: "day" if that is one step.",
-        "The closest rows lie one year apart in "at": say step: "year" if that is one step.",
-        "The closest rows lie one year apart in "at": say step: "year" if that is one step.",
-        "The closest rows lie 0.5 apart in "at": say step: { every: 0.5, of: "at" } if that is one step.",
+        "The closest rows lie half an hour apart in "at": say step: "half-hour" if that is one step.",
+        "The closest rows lie 6 hours apart in "at": say step: { every: 6, of: "hour" } if that is one step.",
+        "The closest rows lie 0.5 apart in "at": say step: { every: 0.5, of: "hour" }, or whatever unit the column counts, if that is one step.",
       ]
     `);
   });

@@ -39,7 +39,12 @@ const unitMonths: Readonly<Record<string, number>> = { month: 1, quarter: 3, yea
 /** "hours" is "hour"; any other word is kept, for periods such as a transfer or a generation. */
 export function singular(unit: string): string {
   const one = unit.trim().replace(/s$/, "");
-  return Object.hasOwn(unitLengths, one) || Object.hasOwn(unitMonths, one) ? one : unit.trim();
+  return isUnit(one) ? one : unit.trim();
+}
+
+/** Whether a word is a unit of time that dates can be counted in. */
+export function isUnit(word: string): boolean {
+  return Object.hasOwn(unitLengths, word) || Object.hasOwn(unitMonths, word);
 }
 
 /** Counts every so many units of time: hours, days, months, or transfers, where the column holds numbers. */

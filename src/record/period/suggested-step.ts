@@ -1,6 +1,6 @@
 import type { Column } from "../column-table.js";
 import { numberColumn } from "../number-column.js";
-import { singular } from "./calendar.js";
+import { isUnit, singular } from "./calendar.js";
 import { dayLength, isMonthEnd, momentOf, monthNumber } from "./calendar-date.js";
 import { unitText } from "./unit-text.js";
 
@@ -15,10 +15,11 @@ export function suggestedStep(column: Column, name: string, isDated: boolean): r
 function ofDates(column: Column): readonly [string, string] {
   const moments = Array.from<unknown>(column).flatMap((cell) => momentOf(cell) ?? []);
   const closest = closestOf(moments);
+  const months = sameDay(moments) ? closestOf(moments.map(monthNumber)) : 0;
   const fits: readonly (readonly [boolean, string, string])[] = [
     [moments.every(isMonthEnd), "one month", '"month-end"'],
-    [sameDay(moments) && closestOf(moments.map(monthNumber)) >= 12, "one year", '"year"'],
-    [sameDay(moments) && closestOf(moments.map(monthNumber)) >= 1, "one month", '"month"'],
+    [months === 12, "one year", '"year"'],
+    [months === 1, "one month", '"month"'],
     [closest === 7 * dayLength, "one week", '"week"'],
     [closest === dayLength, "one day", '"day"'],
     [closest === dayLength / 48, "half an hour", '"half-hour"'],
@@ -38,16 +39,15 @@ function sameDay(moments: readonly number[]): boolean {
 
 function ofNumbers(column: Column, name: string): readonly [string, string] {
   const closest = Number(closestOf(Array.from(numberColumn(column, name).values)).toPrecision(6));
-  return [String(closest), `{ every: ${closest}, of: ${JSON.stringify(singular(name))} }`];
+  const unit = singular(name);
+  return isUnit(unit)
+    ? [String(closest), `{ every: ${closest}, of: "${unit}" }`]
+    : [String(closest), `{ every: ${closest}, of: "hour" }, or whatever unit the column counts,`];
 }
 
-/** Smallest distance between neighbours that differ; 1 where there is none. */
+/** Smallest distance between neighbours that differ; 0 where there is none. */
 function closestOf(places: readonly number[]): number {
   const apart = places.slice(1).map((place, i) => Math.abs(place - places[i]!));
-  return (
-    apart.reduce(
-      (least, distance) => (distance > 0 && distance < least ? distance : least),
-      Number.POSITIVE_INFINITY,
-    ) || 1
-  );
+  const least = apart.reduce((a, b) => (b > 0 && b < a ? b : a), Number.POSITIVE_INFINITY);
+  return Number.isFinite(least) ? least : 0;
 }
