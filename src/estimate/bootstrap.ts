@@ -1,21 +1,14 @@
-import {
-  minimiseSquares,
-  quantile,
-  type RandomStream,
-  randomStream,
-  squaresWorkspace,
-} from "../numeric/index.js";
+import { quantile, type RandomStream, randomStream } from "../numeric/index.js";
 import type { Fit } from "./fit.js";
 import type { GroupFit } from "./group-fit.js";
 import type { Interval } from "./interval.js";
-import { type RefitProblem, refitProblem } from "./refit-problem.js";
 import { refuseFewDraws } from "./refusals.js";
-import { drawnResiduals, type ErrorDraw, normalErrors, recordMaker } from "./simulate-record.js";
+import { type ResampledErrors, type Resampler, resampler } from "./resampler.js";
 
 /** Options of `bootstrap`. */
 export interface BootstrapOptions {
   /** Normal errors (`parametric`, default), the fit's own residuals one by one, or in runs of neighbours (`block`). */
-  readonly errors?: "parametric" | "residual" | "block";
+  readonly errors?: ResampledErrors;
   /** Length of a run; default the cube root of the number of values, rounded up. */
   readonly block?: number;
   /** Refits a group; default 999. */
@@ -42,7 +35,7 @@ export interface BootstrapRow {
 /** Refits of simulated records. */
 export interface Bootstrap {
   readonly kind: "bootstrap";
-  readonly errors: "parametric" | "residual" | "block";
+  readonly errors: ResampledErrors;
   readonly seed: number;
   readonly rows: readonly BootstrapRow[];
   /** Refits that were used, and that found no optimum, over all groups. */
@@ -51,10 +44,11 @@ export interface Bootstrap {
 }
 
 /**
- * Refits a least-squares fit to records simulated from it, and gives the middle share of the estimates as interval
- * (percentiles, definition 7).
+ * Refits a least-squares or state-space fit to records simulated from it, and gives the middle share of the estimates as
+ * interval (percentiles, definition 7).
  *
- * @throws {ModelError} `not-by-least-squares` for fits by another likelihood or of groups together; `too-few-draws`.
+ * @throws {ModelError} `not-by-least-squares` for fits by another likelihood or of groups together; `no-residuals` for
+ *   residuals of a state-space fit; `too-few-draws`.
  * @see Davison and Hinkley (1997), Bootstrap Methods and their Application, sections 7.3 and 8.2.
  * @example bootstrap(crowdingFit, { draws: 99 }).rows[0].name; // "r"
  */
@@ -66,7 +60,8 @@ export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
   const rows = fit.groups.flatMap((fitted) => {
     const own = stream;
     stream = stream.jump();
-    const refits = refitsOf(refitProblem(fit, fitted), fitted, { ...options, errors, draws }, own);
+    const again = resampler(fit, fitted, errors, options.block);
+    const refits = refitsOf(again, fitted.estimates.length, { ...options, draws }, own);
     used += refits.length;
     return rowsOf(fitted, refits, options.level ?? fit.options.level ?? 0.95);
   });
@@ -74,36 +69,21 @@ export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
   return Object.freeze({ kind: "bootstrap", errors, seed, rows: Object.freeze(rows), used, failed });
 }
 
+/** The estimates of the refits, as reported. */
 function refitsOf(
-  problem: RefitProblem,
-  fitted: GroupFit,
-  options: BootstrapOptions & { draws: number },
+  { refit, reported }: Resampler,
+  size: number,
+  { draws, onProgress }: BootstrapOptions & { draws: number },
   stream: RandomStream,
 ): readonly Float64Array[] {
-  const { rule, group, unknowns, rows, system, at } = problem;
-  const make = recordMaker(rule, group, unknowns, rows, problem.options);
-  const draw = errorDraw(problem, fitted, options);
-  const workspace = squaresWorkspace(system.size);
   const found: Float64Array[] = [];
-  for (let k = 0; k < options.draws; k++) {
-    if (k % 100 === 0 && options.onProgress?.(k, options.draws) === false) break;
-    rows.take(make(at, draw(stream)));
-    const { estimates, stop } = minimiseSquares(system, at, {
-      lower: unknowns.lower,
-      upper: unknowns.upper,
-      workspace,
-    });
-    if (stop.kind === "converged") found.push(estimates);
+  for (let k = 0; k < draws; k++) {
+    if (k % 100 === 0 && onProgress?.(k, draws) === false) break;
+    const { estimates, stop } = refit(stream);
+    if (stop.kind === "converged")
+      found.push(Float64Array.from({ length: size }, (_, i) => reported(i, estimates[i]!)));
   }
   return found;
-}
-
-function errorDraw({ rows, at }: RefitProblem, fitted: GroupFit, options: BootstrapOptions): ErrorDraw {
-  if (options.errors === "parametric") return normalErrors(rows, fitted.sigma);
-  rows.prepare(at, false);
-  const residuals = Float64Array.from({ length: rows.count }, (_, i) => rows.residualAt(i));
-  const block = options.errors === "block" ? (options.block ?? Math.ceil(Math.cbrt(rows.count))) : 1;
-  return drawnResiduals(rows, residuals, block);
 }
 
 function rowsOf(fitted: GroupFit, refits: readonly Float64Array[], level: number): BootstrapRow[] {

@@ -199,3 +199,10 @@ export function refuseOverlap(group: string, time: number): ModelError {
     { group, time },
   );
 }
+
+export function refuseNoResiduals(): ModelError {
+  return new ModelError(
+    "no-residuals",
+    'A fit with errors in both has predictions, not residuals, so they cannot be drawn anew. Use bootstrap(fit, { errors: "parametric" }).',
+  );
+}

@@ -10,6 +10,7 @@ import { likelihoodObjective } from "./likelihood-objective.js";
 import { type Optimum, optimum } from "./optimum.js";
 import { prepared } from "./prepared.js";
 import { refuseNoStart } from "./refusals.js";
+import { spreadNames } from "./spread-names.js";
 import { startingPoints } from "./starting-points.js";
 import { type Filtering, isLinearOnScale, type StateSpace, stateSpace } from "./state-space.js";
 import { place, type Unknowns, unknownsOf } from "./unknowns.js";
@@ -56,14 +57,6 @@ export function stateSpaceFit(rule: Rule, group: ObservedGroup, options: FitOpti
   const fitted = (method === "exact" ? attempt("stationary") : undefined) ?? attempt("diffuse");
   if (fitted === undefined) throw refuseNoStart(group, rule.text);
   return fitted;
-}
-
-function spreadNames(rule: Rule, options: FitOptions): readonly string[] {
-  const named = (what: string, state: string): string =>
-    rule.states.length === 1 ? what : `${what} of ${state}`;
-  const process = rule.states.map((state) => named("process error", state));
-  const known = typeof options.spread === "object";
-  return [...process, ...(known ? [] : rule.states.map((state) => named("observation error", state)))];
 }
 
 function withSplits(

@@ -1,0 +1,76 @@
+import { minimiseSquares, type RandomStream, squaresWorkspace } from "../numeric/index.js";
+import type { Fit } from "./fit.js";
+import { bySquares } from "./fit-options.js";
+import type { GroupFit } from "./group-fit.js";
+import { likelihoodObjective } from "./likelihood-objective.js";
+import type { Lowest } from "./objective.js";
+import { refitProblem } from "./refit-problem.js";
+import { refuseNoResiduals } from "./refusals.js";
+import { drawnResiduals, type ErrorDraw, normalErrors, recordMaker } from "./simulate-record.js";
+import { stateSpaceMaker } from "./simulate-state-space.js";
+import { stateSpaceProblem } from "./state-space-problem.js";
+
+/** How errors of simulated records are drawn. */
+export type ResampledErrors = "parametric" | "residual" | "block";
+
+/** A group's fit, ready to be done again on records simulated from it. */
+export interface Resampler {
+  /** One record drawn and fitted. */
+  readonly refit: (stream: RandomStream) => Pick<Lowest, "estimates" | "stop">;
+  /** An unknown as it is reported. */
+  readonly reported: (i: number, value: number) => number;
+}
+
+/**
+ * Makes a group's fit ready to be resampled: a fit by least squares from its errors or residuals, a state-space fit from
+ * both its errors.
+ *
+ * @throws {ModelError} `not-by-least-squares` for other likelihoods and groups together; `no-residuals` where residuals of
+ *   a state-space fit are asked for, which has one-step predictions instead.
+ */
+export function resampler(
+  fit: Fit,
+  fitted: GroupFit,
+  errors: ResampledErrors,
+  block: number | undefined,
+): Resampler {
+  if (fitted.filter === undefined || bySquares(fit.options))
+    return squaresResampler(fit, fitted, errors, block);
+  if (errors !== "parametric") throw refuseNoResiduals();
+  const { unknowns, space, at, rule, group, options } = stateSpaceProblem(fit, fitted);
+  const objective = likelihoodObjective(space.minusTwice, unknowns);
+  objective.covariance(at);
+  const make = stateSpaceMaker(rule, group, options, fitted);
+  return {
+    reported: (i, value) => (unknowns.rooted[i] ? Math.sqrt(value) : value),
+    refit(stream) {
+      space.rows.take(make(stream));
+      return objective.minimise(at, unknowns.lower, unknowns.upper);
+    },
+  };
+}
+
+function squaresResampler(
+  fit: Fit,
+  fitted: GroupFit,
+  errors: ResampledErrors,
+  block: number | undefined,
+): Resampler {
+  const problem = refitProblem(fit, fitted);
+  const { rule, group, unknowns, rows, system, at } = problem;
+  const { lower, upper } = unknowns;
+  const make = recordMaker(rule, group, unknowns, rows, problem.options);
+  const workspace = squaresWorkspace(system.size);
+  rows.prepare(at, false);
+  const residuals = Float64Array.from({ length: rows.count }, (_, i) => rows.residualAt(i));
+  const run = errors === "block" ? (block ?? Math.ceil(Math.cbrt(rows.count))) : 1;
+  const draw: ErrorDraw =
+    errors === "parametric" ? normalErrors(rows, fitted.sigma) : drawnResiduals(rows, residuals, run);
+  return {
+    reported: (_, value) => value,
+    refit(stream) {
+      rows.take(make(at, draw(stream)));
+      return minimiseSquares(system, at, { lower, upper, workspace });
+    },
+  };
+}
