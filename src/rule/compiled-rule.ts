@@ -55,7 +55,7 @@ export interface CompiledRule {
 
 /**
  * Moves paths first..last-1 one period on from t, in place. limits [states, 2]: a path of which a state comes to lie
- * below the first or above the second, or is not finite, ends: it is NaN from there on.
+ * below the first or above the second, or is not finite, ends: it is NaN from there on. Limits -Number.MAX_VALUE and Number.MAX_VALUE hold everything finite.
  */
 export type Advance = (
   present: Float64Array,

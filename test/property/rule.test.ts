@@ -89,6 +89,29 @@ test("many paths abreast take the same steps as each alone", () => {
   );
 });
 
+test("paths of one state abreast take the same steps, and end where they are not finite", () => {
+  const starts = fc.array(fc.oneof(anyNumber, fc.constantFrom(0, 1e200, -1e200, Number.NaN)), {
+    minLength: 1,
+    maxLength: 40,
+  });
+  void fc.assert(
+    fc.property(expressionText(false), starts, fc.constantFrom(Number.MAX_VALUE, 50), (text, from, limit) => {
+      const one = text.replace(/P(\[t-2\])?|N\[t-1\]|\bu\b(\[t\+1\])?/gu, "N");
+      const compiled = compileRule(recurrence(`N[t+1] = ${one} + 0*r*K + 0*N`));
+      const constants = Float64Array.of(0.75, 0.75);
+      const present = Float64Array.from(from);
+      compiled.advance(present, 0, from.length, constants, [], 3, Float64Array.of(-limit, limit));
+      const alone = Float64Array.from(from, (value) => {
+        const state = Float64Array.of(value);
+        compiled.step(state, constants, [], 3, state);
+        return Math.abs(state[0]!) <= limit ? state[0]! : Number.NaN;
+      });
+      expect(present).toEqual(alone);
+    }),
+    seeded,
+  );
+});
+
 test("sensitivities agree with differences of paths", () => {
   let compared = 0;
   void fc.assert(

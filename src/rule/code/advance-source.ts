@@ -1,12 +1,51 @@
 import type { LeafRole } from "../graph/node.js";
 import type { RuleGraph } from "../graph/rule-graph.js";
-import { emitProgram } from "./emit-program.js";
+import { type EmittedProgram, emitProgram } from "./emit-program.js";
 import { lines, readArguments } from "./source-parts.js";
 
 const sharedByPaths: ReadonlySet<LeafRole> = new Set(["constant", "input", "period"]);
 const ofTheirOwn: ReadonlySet<LeafRole> = new Set(["input", "period"]);
 
-/** Body of `advance(present, first, last, constants, inputs, t, limits)`: whatever paths share stands before the loop. */
+/** Paths that an unlimited loop takes at once: their steps overlap in the processor, and one look serves them all. */
+const abreast = 8;
+
+/** The lines that step the path whose state vector begins at a place, between those that read and write it. */
+function stepLines(rule: RuleGraph, program: EmittedProgram, place: string): readonly string[] {
+  return [
+    lines(rule.states, (i) => `const s${i} = present[${place} + ${i}];`),
+    ...program.inside,
+    lines(rule.states, (i) => `const n${i} = ${program.read(rule.next[i]!)};`),
+    lines(rule.states, (i) => `present[${place} + ${i}] = n${i};`),
+  ];
+}
+
+/**
+ * A loop over most paths of a rule of one value, for limits that hold everything finite. A sum that is finite says
+ * that all its parts are; one that is not leaves the lot to the loop that looks at each.
+ */
+function unlimitedLoop(rule: RuleGraph, program: EmittedProgram): readonly string[] {
+  const step = (k: number): readonly string[] => [
+    "{",
+    ...stepLines(rule, program, `path + ${k}`),
+    `e${k} = n0;`,
+    "}",
+  ];
+  const sum = Array.from({ length: abreast / 2 }, (_, k) => `(e${2 * k} + e${2 * k + 1})`).join(" + ");
+  return [
+    "if (low0 === -Number.MAX_VALUE && high0 === Number.MAX_VALUE) {",
+    lines(abreast, (k) => `let e${k} = 0;`),
+    `for (; path + ${abreast} <= last; path += ${abreast}) {`,
+    ...Array.from({ length: abreast }, (_, k) => step(k)).flat(),
+    `const sum = ${sum};`,
+    `if (sum - sum !== 0) for (let at = path; at < path + ${abreast}; at++) {`,
+    "if (!(present[at] >= low0 && present[at] <= high0)) present[at] = NaN;",
+    "}",
+    "}",
+    "}",
+  ];
+}
+
+/** Body of `advance(present, first, last, constants, inputs, t, limits)`: whatever paths share stands before the loops. */
 export function advanceSource(rule: RuleGraph, shared: boolean): string {
   const program = emitProgram(rule.next, shared ? sharedByPaths : ofTheirOwn);
   const { states, constants, observed } = rule;
@@ -18,12 +57,11 @@ export function advanceSource(rule: RuleGraph, shared: boolean): string {
     lines(observed, (i) => `const low${i} = limits[${2 * i}];\nconst high${i} = limits[${2 * i + 1}];`),
     shared ? readArguments(rule) : readArguments({ ...rule, constants: 0 }),
     ...program.before,
-    `for (let path = first, at = first * ${states}; path < last; path++, at += ${states}) {`,
+    "let path = first;",
+    ...(shared && states === 1 ? unlimitedLoop(rule, program) : []),
+    `for (let at = path * ${states}; path < last; path++, at += ${states}) {`,
     shared ? "" : own,
-    lines(states, (i) => `const s${i} = present[at + ${i}];`),
-    ...program.inside,
-    lines(states, (i) => `const n${i} = ${program.read(rule.next[i]!)};`),
-    lines(states, (i) => `present[at + ${i}] = n${i};`),
+    ...stepLines(rule, program, "at"),
     `if (!(${within})) for (let i = 0; i < ${states}; i++) present[at + i] = NaN;`,
     "}",
   ].join("\n");
