@@ -7,8 +7,9 @@ import {
   undo as undoLast,
 } from "../../src/record/index.js";
 import { columnsOf, noteFrame, notesOf, type RecordLike, toFrame } from "../dataframe/index.js";
-import { bundleOf, showing, table } from "../tables/index.js";
+import { bundleOf, showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { decisionsTable } from "./decisions-table.js";
 
 /**
  * Corrects one cell of a record, or leaves a row out. The raw column stays as it was read; beside it stands a
@@ -51,28 +52,11 @@ export interface DecisionsLog {
  *
  * @example decisionsLog(correct(readings, { row: 4, why: "flask shaken" })).decisions.length // 1
  */
-export function decisionsLog(record: RecordLike | Observations): DecisionsLog {
+export function decisionsLog(record: RecordLike): DecisionsLog {
   const isObserved = (record as Partial<Observations>).kind === "observations";
   const { decisions = [] } = isObserved ? (record as Observations) : columnsOf(record as RecordLike);
   const made: DecisionsLog = { kind: "decisions", decisions };
-  return showing(made, async () => (await bundleOf(logTable(decisions))) ?? {});
-}
-
-function logTable(decisions: readonly Decision[]): object {
-  return table({
-    title: "Decisions log",
-    columns: [
-      { key: "row", label: "Row", kind: "integer" },
-      { key: "column", label: "Column", kind: "text" },
-      { key: "was", label: "Was", kind: "number", digits: 15 },
-      { key: "now", label: "Now", kind: "number", digits: 15 },
-      { key: "why", label: "Why", kind: "text" },
-      { key: "who", label: "Who", kind: "text" },
-    ],
-    rows: decisions.map((decision) => ({ ...decision, column: decision.column || "whole row" })),
-    notes: decisions.length === 0 ? ["The record is used as it was read."] : [],
-    format: { group: "" },
-  });
+  return showing(made, async () => (await bundleOf(decisionsTable(decisions))) ?? {});
 }
 
 function sentence({ row, column, was, now, why, who }: Decision): string {

@@ -1,6 +1,7 @@
 import type { Observations, ObservedGroup, ObservedState } from "../../src/record/index.js";
 import { type Figure, type FlaggedValue, recordFigure } from "../figures/index.js";
 import { type Bundle, type Table, table } from "../tables/index.js";
+import { decisionsTable } from "./decisions-table.js";
 import { countsSentence, findingsList, periodSentence } from "./findings-list.js";
 import { shownTogether } from "./shown-together.js";
 
@@ -10,7 +11,9 @@ const drawn = 12;
 /** Shows a record: one line a series, the raw values with flagged rows marked, and what was found. */
 export function observationsBundle(observations: Observations): Promise<Bundle> {
   const findings = findingsList(observations.findings);
-  return shownTogether([seriesTable(observations), findings, ...recordFigures(observations)]);
+  const { decisions = [] } = observations;
+  const decided = decisions.length > 0 ? decisionsTable(decisions) : undefined;
+  return shownTogether([seriesTable(observations), findings, decided, ...recordFigures(observations)]);
 }
 
 function seriesTable(observations: Observations): Table {

@@ -1,13 +1,22 @@
 import type { DataFrame } from "danfojs-node";
-import { type ColumnTable, isColumnTable, packed, tableOf, tableOfRows } from "../../src/record/index.js";
+import {
+  type ColumnTable,
+  isColumnTable,
+  type Observations,
+  packed,
+  tableOf,
+  tableOfRows,
+} from "../../src/record/index.js";
 import { isFrame } from "./danfo.js";
 import { notesOf } from "./frame-notes.js";
+import { observedTable } from "./observed-table.js";
 import { notARecord } from "./refusals.js";
 
-/** Anything a record can be given as: a frame, rows as objects, columns by name, or a table of columns. */
+/** Anything a record can be given as: a frame, rows as objects, columns by name, a table of columns, observations. */
 export type RecordLike =
   | DataFrame
   | ColumnTable
+  | Observations
   | readonly Readonly<Record<string, unknown>>[]
   | Readonly<Record<string, ArrayLike<unknown>>>;
 
@@ -23,10 +32,16 @@ export function columnsOf(record: RecordLike): ColumnTable {
   if (Array.isArray(record)) return columnsOfRows(record);
   if (typeof record !== "object" || record === null) throw notARecord(record);
   if (isColumnTable(record)) return record;
+  if (isObserved(record)) return observedTable(record);
   const entries = Object.entries(record as Record<string, unknown>);
   const bad = entries.find(([, column]) => !Array.isArray(column) && !ArrayBuffer.isView(column));
   if (bad !== undefined || entries.length === 0) throw notARecord(record, bad?.[0]);
   return tableOf(record as Record<string, ArrayLike<unknown>>);
+}
+
+function isObserved(record: object): record is Observations {
+  const { kind, groups } = record as { kind?: unknown; groups?: unknown };
+  return kind === "observations" && Array.isArray(groups);
 }
 
 function columnsOfFrame(frame: DataFrame): ColumnTable {

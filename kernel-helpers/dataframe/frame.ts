@@ -1,11 +1,10 @@
 import type { DataFrame } from "danfojs-node";
 import { estimates, type Fit, points, summary } from "../../src/estimate/index.js";
-import type { Differences, Observations } from "../../src/record/index.js";
+import type { Differences } from "../../src/record/index.js";
 import { tableOfRows } from "../../src/record/index.js";
 import type { NamedTable } from "../../src/store/index.js";
 import { columnsOf, type RecordLike } from "./columns-of.js";
 import { isFrame } from "./danfo.js";
-import { observedTable } from "./observed-table.js";
 import { resultTables } from "./result-tables.js";
 import { toFrame } from "./to-frame.js";
 
@@ -30,7 +29,7 @@ export interface FitFrames {
  *
  * @example frame(fit(rule, counts, { errors: "process" })).estimates
  */
-export function frame(record: RecordLike | Observations | Differences): DataFrame;
+export function frame(record: RecordLike | Differences): DataFrame;
 export function frame(fit: Fit): FitFrames;
 export function frame(result: Result): Readonly<Record<string, DataFrame>>;
 export function frame(
@@ -46,8 +45,6 @@ export function frame(
 /** The tables of a record or result; a single one named "record" where there is but one. */
 export function tablesOf(value: RecordLike | Result): readonly NamedTable[] {
   switch ((value as Partial<Result>).kind) {
-    case "observations":
-      return [{ name: "record", table: observedTable(value as Observations) }];
     case "differences":
       return resultTables({ series: (value as Differences).series }).map(({ table }) => ({
         name: "record",
@@ -56,7 +53,8 @@ export function tablesOf(value: RecordLike | Result): readonly NamedTable[] {
     case "fit":
       return tablesOfFit(value as Fit);
   }
-  if (!isFrame(value) && typeof (value as Partial<Result>).kind === "string") return resultTables(value);
+  const { kind } = value as Partial<Result>;
+  if (!isFrame(value) && typeof kind === "string" && kind !== "observations") return resultTables(value);
   return [{ name: "record", table: columnsOf(value as RecordLike) }];
 }
 

@@ -1,7 +1,10 @@
+import { mkdtempSync, rmSync } from "node:fs";
+import { tmpdir } from "node:os";
+import { join } from "node:path";
 import type { DataFrame } from "danfojs-node";
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import { differences, observations } from "../../kernel-helpers/commands/records.js";
+import { differences, observations, readRecord, writeRecord } from "../../kernel-helpers/commands/records.js";
 import { columnsOf, frame, toFrame } from "../../kernel-helpers/dataframe/index.js";
 import { fit } from "../../src/estimate/index.js";
 import { type ColumnTable, type Observations, tableOf } from "../../src/record/index.js";
@@ -72,6 +75,38 @@ describe("frames out", () => {
   test("arithmetic is exact in double precision", () => {
     // 0.1 + 0.2 in IEEE 754 double arithmetic; single precision would give 0.30000001192092896.
     expect((toFrame(tableOf({ a: [0.1] })).add(0.2) as DataFrame).values).toEqual([[0.30000000000000004]]);
+  });
+
+  // danfo's own copy shares its rows with the original.
+  test("a frame made from a record shares no cell with it", () => {
+    const read = toFrame(tableOf({ week: [1, 2], stock: [90, 83] }));
+    const made = toFrame(columnsOf(read));
+    made.setIndex({ index: ["a", "b"], inplace: true });
+    (made.values as number[][])[0]![1] = 0;
+    expect(read.values).toEqual([
+      [1, 90],
+      [2, 83],
+    ]);
+  });
+
+  test("observations are a record again", () => {
+    const counts = observations({ week: [1, 2, 4], stock: [9, 8, 6] }, options);
+    expect(frame(counts).columns).toEqual(["row", "step", "week", "stock"]);
+    expect(plain(observations(counts, options))).toEqual(plain(counts));
+  });
+
+  test("any result is written to a workbook with a sheet a table", async () => {
+    const counts = observations(
+      { hour: [0, 1, 2, 3, 4, 5, 6], N: [10, 18, 31, 50, 69, 85, 93] },
+      { period: "hour", step: "hour", value: "N" },
+    );
+    const folder = mkdtempSync(join(tmpdir(), "periodwise-result-"));
+    const path = join(folder, "crowding.xlsx");
+    await writeRecord(fit(recurrence("ΔN = r*N*(1 - N/K)"), counts, { errors: "observation" }), path);
+    const estimates = await readRecord(path, { table: "estimates" });
+    expect(estimates.column("name").values).toEqual(expect.arrayContaining(["r", "K"]));
+    await expect(readRecord(path)).rejects.toThrow('several tables: "estimates", "points", "summary"');
+    rmSync(folder, { recursive: true, force: true });
   });
 
   test("a fit becomes its three views, and differences one frame", () => {

@@ -1,0 +1,20 @@
+import type { Decision } from "../../src/record/index.js";
+import { type Table, table } from "../tables/index.js";
+
+/** The decisions log as a table: what was read, what is used, why, and who said so. */
+export function decisionsTable(decisions: readonly Decision[]): Table {
+  return table({
+    title: "Decisions log",
+    columns: [
+      { key: "row", label: "Row", kind: "integer" },
+      { key: "column", label: "Column", kind: "text" },
+      { key: "was", label: "Was", kind: "number", digits: 15 },
+      { key: "now", label: "Now", kind: "number", digits: 15 },
+      { key: "why", label: "Why", kind: "text" },
+      { key: "who", label: "Who", kind: "text" },
+    ],
+    rows: decisions.map((decision) => ({ ...decision, column: decision.column || "whole row" })),
+    notes: decisions.length === 0 ? ["The record is used as it was read."] : [],
+    format: { group: "" },
+  });
+}
