@@ -1,6 +1,7 @@
 import { randomUUID } from "node:crypto";
-import { type CellSession, cellSession, followName } from "./cells/cell-session.js";
+import { type CellSession, cellSession, followName, stretchesName } from "./cells/cell-session.js";
 import { interrupts } from "./cells/interrupts.js";
+import { runInStretches } from "./cells/run-in-stretches.js";
 import { sourceRegister } from "./cells/source-register.js";
 import type { StringLanguage } from "./language/string-language.js";
 import { captureStreams } from "./output/capture-streams.js";
@@ -92,6 +93,7 @@ function offerGlobals(kernel: KernelState): void {
     input: kernel.questions.ask,
     [displayName]: display,
     [followName]: kernel.interrupts.follow,
+    [stretchesName]: runInStretches,
   };
   for (const name of Reflect.ownKeys(offered)) {
     Object.defineProperty(globalThis, name, {

@@ -16,6 +16,8 @@ export interface CompiledCell {
   /** What later cells may name, as declarations. */
   readonly declarations: string;
   readonly usesAwait: boolean;
+  /** Whether its waits were turned into yields. */
+  readonly yields: boolean;
   /** The export that holds the value of the cell's last expression. */
   readonly lastValue: string | undefined;
   readonly findPlace: PlaceFinder | undefined;
@@ -87,10 +89,12 @@ function compiledCell(
 ): CompiledCell {
   if (converted.diagnostics.length > 0) throw new CellError(converted.diagnostics.map(complaint));
   const code = converted.output ?? "";
+  const loopsOverWaits = hasTopLevelForAwait(typescript.library, text);
   return {
     code,
     declarations: converted.declOutput ?? "",
-    usesAwait: converted.hasToplevelAwait === true || hasTopLevelForAwait(typescript.library, text),
+    usesAwait: converted.hasToplevelAwait === true || loopsOverWaits,
+    yields: converted.hasToplevelAwait === true && !loopsOverWaits,
     lastValue: converted.lastExpressionVar,
     findPlace: ofCell(typescript.finderOf(code), code.split("\n").length),
     modules: (converted.sideOutputs ?? []).map(({ path, data }) => ({

@@ -35,7 +35,9 @@ export interface CellSession {
   readonly stop: () => void;
 }
 
+/** Names of what the wrapped code of a cell calls; put on the global object by the kernel. */
 export const followName = "__periodwiseFollow";
+export const stretchesName = "__periodwiseStretches";
 
 export function cellSession(folder: string, sources: SourceRegister): CellSession {
   const packages = ownPackages();
@@ -94,17 +96,21 @@ function moduleSource(folder: string, { path, findPlace }: CompiledModule): Sour
 
 /** The cell as the executor takes it, with its name for stack traces. */
 function executable(cell: CompiledCell, modules: readonly CompiledModule[], name: string): ConvertResult {
-  const { code, usesAwait } = cell;
-  // A map counts the lines of the code alone, so what goes around it stays on a line of its own.
-  const body = usesAwait ? `await ${followName}((async () => {\n${code}\n})())` : `\n${code}`;
   return {
-    output: `${body}\n//# sourceURL=${name}`,
+    output: `${bodyOf(cell)}\n//# sourceURL=${name}`,
     declOutput: cell.declarations,
     diagnostics: [],
-    hasToplevelAwait: usesAwait,
+    hasToplevelAwait: cell.usesAwait,
     sideOutputs: modules.map((module) => ({ path: module.path, data: module.code })),
     ...(cell.lastValue === undefined ? {} : { lastExpressionVar: cell.lastValue }),
   };
+}
+
+/** A map counts the lines of the code alone, so what goes around it stays on a line of its own. */
+function bodyOf({ code, usesAwait, yields }: CompiledCell): string {
+  if (!usesAwait) return `\n${code}`;
+  if (yields) return `await ${followName}(${stretchesName}(function* () {\n${code}\n}))`;
+  return `await ${followName}((async () => {\n${code}\n})())`;
 }
 
 /** A failed cell leaves earlier values: names it declared again get their former value back. */

@@ -1,6 +1,7 @@
 import type ts from "typescript-cell";
 import { loopChecks } from "./loop-checks.js";
 import { type PlaceFinder, placeFinder, splitInlineMap } from "./source-places.js";
+import { topLevelYields } from "./top-level-yields.js";
 
 /** The second stage of compilation, to CommonJS. */
 export interface SecondStage {
@@ -12,7 +13,7 @@ export interface SecondStage {
 /** Adds loop checks and keeps the maps of both stages. */
 export function secondStage(library: typeof ts): SecondStage {
   const finders = new Map<string, PlaceFinder>();
-  const transformers = { before: [loopChecks(library)] };
+  const transformers = { before: [topLevelYields(library), loopChecks(library)] };
   return {
     transpile: (code, options) => {
       const first = splitInlineMap(code);

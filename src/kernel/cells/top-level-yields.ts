@@ -1,0 +1,22 @@
+import type ts from "typescript-cell";
+import { hasTopLevelForAwait } from "./top-level-for-await.js";
+
+/**
+ * Turns the top-level waits of a cell into yields, so that the cell can be run as a generator, stretch by
+ * stretch, and stopped within any of them (see run-in-stretches.ts). A cell with `for await` stays as it is.
+ */
+export function topLevelYields(library: typeof ts): ts.TransformerFactory<ts.SourceFile> {
+  const { factory } = library;
+  return (context) => {
+    const visit = (node: ts.Node): ts.Node => {
+      if (library.isFunctionLike(node) || library.isClassLike(node)) return node;
+      const visited = library.visitEachChild(node, visit, context);
+      if (!library.isAwaitExpression(visited)) return visited;
+      return factory.createParenthesizedExpression(
+        factory.createYieldExpression(undefined, visited.expression),
+      );
+    };
+    return (file) =>
+      hasTopLevelForAwait(library, file.text) ? file : library.visitEachChild(file, visit, context);
+  };
+}
