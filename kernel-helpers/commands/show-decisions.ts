@@ -7,6 +7,7 @@ import {
 } from "../../src/decision/index.js";
 import { type Figure, figure } from "../figures/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
+import { ruleTitle } from "./rule-title.js";
 import { projectedName } from "./show-forecast.js";
 
 const percent = (level: number): string => `${Number((100 * level).toPrecision(12))}%`;
@@ -25,7 +26,7 @@ function reachTable(found: Reach): Table {
   const random = found.groups.some((group) => group.draws > 1);
   const grouped: Column[] = found.groups.length > 1 ? [{ key: "who", label: "Group", kind: "text" }] : [];
   return table({
-    title: `When ${found.state} reaches ${amountWords(found)} by ${found.rule.replaceAll("\n", "; ")}`,
+    title: `When ${found.state} reaches ${amountWords(found)}${ruleTitle(found.rule, "by")}`,
     columns: [
       ...grouped,
       { key: "time", label: "Without random change", ...time },

@@ -2,6 +2,7 @@ import type { GroupForecast, Simulation } from "../../src/projection/index.js";
 import { type Figure, figure, type Layer } from "../figures/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
+import { ruleTitle } from "./rule-title.js";
 
 /** A simulation as a reader sees it: its paths by scenario, and the numbers at their periods. */
 export function showSimulation(run: Simulation): readonly (Figure | Table)[] {
@@ -13,7 +14,7 @@ const percent = (level: number): string => `${Number((100 * level).toPrecision(1
 function figuresOf(run: Simulation): Figure[] {
   return run.rule.states.map((name, s) =>
     figure({
-      title: `Simulation of ${run.rule.text}`,
+      title: `Simulation${ruleTitle(run.rule.text, "of")}: ${name}`,
       panels: run.groups.map((group) => ({
         title: group.scenario,
         x: { title: run.options.period },
@@ -63,11 +64,19 @@ function tableOf(run: Simulation): Table {
   });
 }
 
+/** Rows shown of all scenarios and states together. */
+const shownRows = 24;
+
+/** Some periods of every scenario and state, evenly spread from the first to the last. */
 function rowsOf(run: Simulation, level: number): Readonly<Record<string, unknown>>[] {
+  const each = Math.max(5, Math.floor(shownRows / (run.groups.length * run.rule.states.length)));
+  const last = run.options.periods;
+  const count = Math.min(each, last + 1);
+  const shown = Array.from({ length: count }, (_, k) => Math.round((k * last) / Math.max(1, count - 1)));
   return run.groups.flatMap((group) =>
     group.states.flatMap((state) => {
       const band = state.bands.find((each) => each.level === level);
-      return group.index.map((_, t) => ({
+      return shown.map((t) => ({
         scenario: group.scenario,
         state: state.state,
         period: group.time[t],

@@ -1,6 +1,6 @@
 import type { Forecast, Simulation } from "../projection/index.js";
 import type { AcrossUnits } from "./across-units.js";
-import { amount, levelWords, opened, plain, rounded, shareOfDraws } from "./amount.js";
+import { amount, levelWords, opened, percent, plain, rounded, shareOfDraws } from "./amount.js";
 import type { GroupReach, ReachQuestion } from "./reach.js";
 import { conditionWords, groupWords } from "./record-words.js";
 
@@ -83,7 +83,9 @@ function alreadyThere(ahead: Ahead, answer: Answer, question: ReachQuestion): st
 }
 
 function notReached(ahead: Ahead, answer: Answer, question: ReachQuestion): string {
-  const { tendsTo, draws, words } = answer;
+  const { tendsTo, draws, words, never, neverError } = answer;
+  if (question.margin === "random change" && draws > 1 && never < 1)
+    return `the chance that ${subject(ahead, answer, question)} reaches ${target(question)} by ${words.horizon} is ${percent(1 - never, neverError)} (Monte-Carlo error ${percent(neverError, neverError / 3)}); without random change it does not`;
   const levels = tendsTo === undefined ? "" : `; the path levels off near ${levelledAt(tendsTo, question)}`;
   const some =
     answer.never === 1 || draws === 1
