@@ -59,8 +59,8 @@ function tableOf(run: Simulation): Table {
     title: "Simulated periods",
     columns,
     rows: rowsOf(run, level),
-    limit: 24,
-    notes: notesOf(run),
+    limit: 60,
+    notes: ["Some of the periods, evenly spread; the result holds all of them.", ...notesOf(run)],
   });
 }
 

@@ -35,7 +35,7 @@ export interface EnsembleRun {
   readonly streams: readonly RandomStream[];
   /** Told of every step before it is taken: the path, its state vector and constants, and the absolute period. */
   readonly onStep?: (path: number, state: Float64Array, constants: Float64Array, t: number) => void;
-  /** Takes the values of all paths at row `t`, [states][paths]; NaN where a path has ended. Not to be kept. */
+  /** Takes the values of all paths at row `t`, [states][paths]; NaN where a path has ended. Not to be kept; may be reordered. */
   readonly onRow: (t: number, values: readonly Float64Array[]) => void;
   /** Called after every block of a period; what it throws ends the run. */
   readonly onProgress?: (done: number, of: number) => void;
@@ -59,45 +59,63 @@ export function runEnsemble(run: EnsembleRun): void {
   const { paths } = starts;
   const present = new Float64Array(paths * width);
   for (let path = 0; path < paths; path++) present.set(rowOf(starts.initial, path, width), path * width);
+  // A copy of the states, because who takes a row may reorder it.
   const reported = Array.from({ length: states }, () => new Float64Array(paths));
-  const scatter = scatterer(run);
-  const advance = stepper(run);
+  const moves: Moves = { run, scatter: scatterer(run), limits: finiteLimits(run.limits) };
   for (let t = 0; t <= periods; t++) {
     for (let block = 0; block * blockSize < paths; block++) {
       const first = block * blockSize;
       const last = Math.min(first + blockSize, paths);
-      if (t > 0) {
-        if (run.onStep !== undefined) tellSteps(run, present, first, last, run.from + t - 1);
-        advance(present, first, last, run.from + t - 1);
-        run.change.forEach((draw, s) => {
-          if (draw !== undefined) scatter(draw, present, first * width + s, width, last - first, block);
-        });
-        endOutside(run, present, first, last);
-      }
-      report(run, present, first, last, reported);
-      run.reading.forEach((draw, s) => {
-        if (draw !== undefined) scatter(draw, reported[s]!, first, 1, last - first, block);
-      });
+      if (t > 0) advanceBlock(moves, present, first, last, t, block);
+      report(moves, present, first, last, reported, block);
       run.onProgress?.(t * paths + last, (periods + 1) * paths);
     }
     run.onRow(t, reported);
   }
 }
 
-function rowOf(rows: Float64Array, path: number, width: number): Float64Array {
-  return rows.length === width ? rows : rows.subarray(path * width, (path + 1) * width);
+interface Moves {
+  readonly run: EnsembleRun;
+  readonly scatter: Scatter;
+  /** [states, 2], all finite. */
+  readonly limits: Float64Array;
 }
 
-type Advance = (present: Float64Array, first: number, last: number, t: number) => void;
+const finiteLimits = (limits: EnsembleRun["limits"]): Float64Array =>
+  Float64Array.from(
+    limits.flatMap(([low, high]) => [Math.max(low, -Number.MAX_VALUE), Math.min(high, Number.MAX_VALUE)]),
+  );
 
-/** One period of a block of paths by the rule. */
-function stepper(run: EnsembleRun): Advance {
-  const { compiled, inputs, starts } = run;
-  const { size, constants } = starts;
-  const advance = constants.length === size ? compiled.advance : compiled.advanceEach;
-  return (present, first, last, t) => {
-    advance(present, first, last, constants, inputs, t);
-  };
+/** One period of a block: the rule, then its random change, then the look at the limits. */
+function advanceBlock(
+  { run, scatter, limits }: Moves,
+  present: Float64Array,
+  first: number,
+  last: number,
+  t: number,
+  block: number,
+): void {
+  const { compiled, inputs, starts, width, change } = run;
+  const from = run.from + t - 1;
+  const random = change.some((draw) => draw !== undefined);
+  const advance = starts.constants.length === starts.size ? compiled.advance : compiled.advanceEach;
+  if (run.onStep !== undefined) tellSteps(run, present, first, last, from);
+  // Random change may bring a value back, so limits count after it.
+  advance(present, first, last, starts.constants, inputs, from, random ? unlimited(limits.length) : limits);
+  if (!random) return;
+  change.forEach((draw, s) => {
+    if (draw !== undefined) scatter(draw, present, first * width + s, width, last - first, block);
+  });
+  endOutside(run, limits, present, first, last);
+}
+
+const unlimited = (length: number): Float64Array =>
+  Float64Array.from({ length }, (_, i) =>
+    i % 2 === 0 ? Number.NEGATIVE_INFINITY : Number.POSITIVE_INFINITY,
+  );
+
+function rowOf(rows: Float64Array, path: number, width: number): Float64Array {
+  return rows.length === width ? rows : rows.subarray(path * width, (path + 1) * width);
 }
 
 /** Tells of the steps that a block is about to take; ended paths take none. */
@@ -162,11 +180,16 @@ function scatterEach(
 }
 
 /** Ends the paths of which a state lies out of range: all their values are NaN from there on. */
-function endOutside(run: EnsembleRun, present: Float64Array, first: number, last: number): void {
-  const { width, states, limits } = run;
+function endOutside(
+  { width, states }: EnsembleRun,
+  limits: Float64Array,
+  present: Float64Array,
+  first: number,
+  last: number,
+): void {
   for (let s = 0; s < states; s++) {
-    const low = Math.max(limits[s]![0], -Number.MAX_VALUE);
-    const high = Math.min(limits[s]![1], Number.MAX_VALUE);
+    const low = limits[2 * s]!;
+    const high = limits[2 * s + 1]!;
     for (let at = first * width + s; at < last * width; at += width) {
       const value = present[at]!;
       if (!(value >= low && value <= high)) present.fill(Number.NaN, at - s, at - s + width);
@@ -175,14 +198,19 @@ function endOutside(run: EnsembleRun, present: Float64Array, first: number, last
 }
 
 function report(
-  { width, states }: EnsembleRun,
+  { run, scatter }: Moves,
   present: Float64Array,
   first: number,
   last: number,
   reported: readonly Float64Array[],
+  block: number,
 ): void {
+  const { width, states } = run;
   for (let s = 0; s < states; s++) {
     const column = reported[s]!;
-    for (let path = first; path < last; path++) column[path] = present[path * width + s]!;
+    if (width === 1) column.set(present.subarray(first, last), first);
+    else for (let path = first; path < last; path++) column[path] = present[path * width + s]!;
+    const draw = run.reading[s];
+    if (draw !== undefined) scatter(draw, column, first, 1, last - first, block);
   }
 }
