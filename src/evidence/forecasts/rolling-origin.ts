@@ -3,7 +3,7 @@ import type { ObservedGroup } from "../../record/index.js";
 import { type ForecastScores, type Scored, scoresOf } from "./forecast-scores.js";
 import { type NaiveForecast, naiveForecasts } from "./naive-forecasts.js";
 import type { Prediction } from "./predict-ahead.js";
-import { predictFrom } from "./predict-from.js";
+import { fitUntil, predictFrom } from "./predict-from.js";
 
 /** Forecasts made from several origins, each from the record up to it, and what came. */
 export interface RollingOrigin {
@@ -22,6 +22,8 @@ export interface RollingOrigin {
 export interface OriginPlan {
   /** Rows left out behind each origin, at least 1. */
   readonly leftOut: readonly number[];
+  /** Fits once, at the first origin, and only carries on from the later ones. */
+  readonly fitOnce?: boolean;
   readonly horizon: number;
   readonly level: number;
 }
@@ -48,8 +50,13 @@ export function rollingOrigin(fits: readonly Fit[], plan: OriginPlan): RollingOr
   const made = first.observations.groups.flatMap((group) => {
     const last = group.index.length - 1;
     const origins = plan.leftOut.map((rows) => last - rows).filter((origin) => origin >= 3);
+    let trained: readonly (Fit | undefined)[] | undefined;
     return origins
-      .map((origin) => forecastsAt(fits, naive, group, origin, plan.horizon))
+      .map((origin) => {
+        if (trained === undefined || !plan.fitOnce)
+          trained = fits.map((fit) => fitUntil(fit, group.name, origin));
+        return forecastsAt(fits, trained, naive, group, origin, plan.horizon);
+      })
       .filter((forecasts) => forecasts.length > 0);
   });
   const scored = made.flat();
@@ -70,12 +77,13 @@ export function rollingOrigin(fits: readonly Fit[], plan: OriginPlan): RollingOr
 /** What every rival and naive forecast said of each value after an origin; only values of which all said something. */
 function forecastsAt(
   fits: readonly Fit[],
+  trained: readonly (Fit | undefined)[],
   naive: readonly NaiveForecast[],
   group: ObservedGroup,
   origin: number,
   horizon: number,
 ): readonly (readonly Scored[])[] {
-  const rivals = fits.map((fit) => predictFrom(fit, group.name, origin, horizon));
+  const rivals = trained.map((own, i) => own && predictFrom(own, fits[i]!, group.name, origin, horizon));
   if (rivals.some((rival) => rival === undefined)) return [];
   return targetsOf(group, fits[0]!.rule.states, origin, horizon).flatMap((target) => {
     const all = [

@@ -3,7 +3,7 @@ import { isWorse } from "../forecasts/is-worse.js";
 import { rollingOrigin } from "../forecasts/rolling-origin.js";
 import type { Standing } from "./supported-rules.js";
 
-/** How supported rules forecast the last fifth of a record from the rows before it. */
+/** How supported rules, fitted to the rows before it, forecast the last fifth of a record one period ahead. */
 export interface HoldOut {
   /** [standings]: mean ranked probability score; undefined where the rule was not forecast. */
   readonly scores: readonly (number | undefined)[];
@@ -16,10 +16,13 @@ export interface HoldOut {
 
 /** Share of the record that is held out. */
 const share = 0.2;
-/** Standard errors by which a naive forecast must be ahead: few values that go together, hence more than 2. */
+/** Standard errors by which a naive forecast must be ahead: with few values 2 would come up by chance. */
 const clearly = 3;
 
-/** Fits the supported rules to all but the last fifth and forecasts it; undefined where that cannot be done. */
+/**
+ * Fits the supported rules to all but the last fifth and forecasts each of its values from the row before it; undefined
+ * where that cannot be done. One period ahead, because errors of longer forecasts go together and cannot be counted.
+ */
 export function holdOut(standings: readonly Standing[]): HoldOut | undefined {
   const supported = standings.filter((standing) => standing.supported);
   const rows = Math.min(
@@ -29,7 +32,7 @@ export function holdOut(standings: readonly Standing[]): HoldOut | undefined {
   if (supported.length === 0 || held < 1) return undefined;
   const rolled = rollingOrigin(
     supported.map(({ tried }) => tried.fit),
-    { leftOut: [held], horizon: held, level: 0.8 },
+    { leftOut: Array.from({ length: held }, (_, i) => held - i), horizon: 1, level: 0.8, fitOnce: true },
   );
   if (rolled === undefined) return undefined;
   const naive = rolled.scores.filter(({ kind }) => kind === "naive");

@@ -11,10 +11,19 @@ export function proposalWords(
 ): Pick<Proposal, "sentence" | "notes"> {
   const notes = [
     `${tried} fits were tried. Among so many the best owes part of its lead to chance: leads below ${supportedWithin} in AICc are no evidence, and a rule must be ${aheadOfNaive} ahead of "no change" and "mean level".`,
-    ...(found.advice ? [found.advice.sentence] : []),
+    ...adviceNote(found),
     ...heldOutNote(found, heldOut),
   ];
   return { sentence: sentenceOf(found), notes };
+}
+
+function adviceNote({ advice, errors }: Found): string[] {
+  if (advice !== undefined) return [advice.sentence];
+  return errors === "undecided"
+    ? [
+        "Where the error lies is left open: rules that explain the record about as well speak for different places.",
+      ]
+    : [];
 }
 
 function sentenceOf({ rows, verdict, errors }: Found): string {

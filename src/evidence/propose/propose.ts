@@ -129,10 +129,23 @@ function judged({ record, settings, tried, notTried, errors, seed }: Trial): Pro
   return Object.freeze({ kind: "proposal", ...result, ...words });
 }
 
-/** Which kind of error the record speaks for, by the rule that explains it best with either. */
+/**
+ * Which kind of error the record speaks for, by the rule that explains it best with either: where the two rules do not
+ * agree it is left open.
+ */
 function adviceOn(tried: readonly Tried[], seed: number): ErrorAdvice | undefined {
-  const [best] = [...tried].sort((a, b) => a.aicCorrected - b.aicCorrected);
-  return best && errorAdvice(best.fit, best.fit.groups[0]!, adviceDraws, randomStream(seed));
+  const best = (kind: Tried["errors"]): Tried | undefined =>
+    tried
+      .filter((each) => each.errors === kind)
+      .reduce<Tried | undefined>(
+        (low, next) => (low && low.aicCorrected <= next.aicCorrected ? low : next),
+        undefined,
+      );
+  const [first, second] = [best("process"), best("observation")].map(
+    (each) => each && errorAdvice(each.fit, each.fit.groups[0]!, adviceDraws, randomStream(seed)),
+  );
+  if (first === undefined || second === undefined || first.kind === second.kind) return first ?? second;
+  return first.kind === "undecided" ? first : second.kind === "undecided" ? second : undefined;
 }
 
 function rowOf(standing: Standing, heldOut: number | undefined, beatenBy: string | undefined): ProposedRule {
