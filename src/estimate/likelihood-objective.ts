@@ -30,9 +30,7 @@ export function likelihoodObjective(
     value,
     minimise(start, low, high) {
       scale ??= start.map((each) => Math.abs(each) || 1);
-      const held = low.map((limit, i) => (limit === high[i] ? 1 : 0));
-      const known = inverse && { inverse: conditioned(inverse, held) };
-      const found = minimise(value, start, { lower: low, upper: high, scale, ...known });
+      const found = minimise(value, start, { lower: low, upper: high, scale, ...(inverse && { inverse }) });
       last = Float64Array.from(found.estimates);
       return found;
     },
@@ -96,18 +94,4 @@ function covarianceOfFree(
     });
   });
   return { covariance, determined, rank: inside.rank };
-}
-
-/** Inverse second derivatives of the unknowns that move, given those held: a held one is swept out. */
-function conditioned(inverse: Float64Array, held: Float64Array): Float64Array {
-  const size = held.length;
-  const swept = inverse.slice();
-  held.forEach((isHeld, h) => {
-    const pivot = swept[h * size + h]!;
-    if (isHeld !== 1 || !(pivot > 0)) return;
-    const column = Float64Array.from({ length: size }, (_, i) => swept[i * size + h]!);
-    for (let k = 0; k < swept.length; k++)
-      swept[k] = swept[k]! - (column[Math.floor(k / size)]! * column[k % size]!) / pivot;
-  });
-  return swept;
 }

@@ -1,4 +1,5 @@
 import type { StopReason } from "./stop-reason.js";
+import { sweepHeld } from "./sweep-held.js";
 
 /** Where a search for the lowest value of a function ended. */
 export interface LowestValue {
@@ -153,15 +154,20 @@ function localModel(
     isFresh: () => fresh,
     restart,
     step() {
-      const moving = Array.from({ length: size }, (_, i) => i).filter((i) => !held(i));
+      const stopped = Array.from(at, (_, i) => held(i));
+      const free = sweepHeld(inverse, stopped);
       const direction = new Float64Array(size);
-      for (const i of moving)
-        for (const j of moving) direction[i] = direction[i]! - inverse[i * size + j]! * gradient[j]!;
-      const slope = moving.reduce((sum, i) => sum + direction[i]! * gradient[i]!, 0);
+      for (let k = 0; k < free.length; k++) {
+        const i = Math.floor(k / size);
+        if (!stopped[i] && !stopped[k % size]) direction[i] = direction[i]! - free[k]! * gradient[k % size]!;
+      }
+      const slope = direction.reduce((sum, value, i) => sum + value * gradient[i]!, 0);
       return { direction, expected: -slope / 2 };
     },
     update(here) {
       takeGradient(here);
+      // What an argument held at its bound does to the slopes says nothing about those that move.
+      for (let i = 0; i < size; i++) if (at[i] === before[i] && held(i)) gradientBefore[i] = gradient[i]!;
       updateInverse(inverse, at, before, gradient, gradientBefore);
       remember();
       fresh = false;

@@ -74,3 +74,19 @@ describe("gridInterval", () => {
     expect(Math.abs(grid.upper! - profile.upper!)).toBeLessThan(0.4 * standardError!);
   });
 });
+
+test("a state-space fit is resampled from both its errors", () => {
+  const stream = randomStream(21);
+  const x = [5];
+  for (let t = 1; t < 50; t++) x.push(2 + 0.6 * x[t - 1]! + stream.normal());
+  const read = x.map((value) => value + 0.7 * stream.normal());
+  const both = fit(recurrence("x[t+1] = a + b*x"), record({ x: read }), { errors: "both" });
+  const { rows, used } = bootstrap(both, { draws: 100 });
+  expect(used).toBeGreaterThan(90);
+  const slope = rows.find(({ name }) => name === "b")!;
+  expect(slope.interval.lower!).toBeLessThan(slope.estimate);
+  expect(slope.interval.upper!).toBeGreaterThan(slope.estimate);
+  expect(() => bootstrap(both, { errors: "block" })).toThrow(
+    expect.objectContaining({ code: "no-residuals" }),
+  );
+});
