@@ -4,8 +4,8 @@
  * Random bits: xoshiro256++ (Blackman and Vigna 2021, ACM TOMS 47:36).
  * Normal values: ziggurat of 256 layers (Marsaglia and Tsang 2000, J. Stat. Softw. 5:8), with separate bits for
  * layer, sign and place, and the tail by Marsaglia (1964).
- * Exponentials: argument reduced by multiples of ln 2, then a Taylor polynomial of degree 13; error below 2 units in
- * the last place. No library is linked, so the same digits come out wherever it runs.
+ * Exponentials: argument reduced by multiples of ln 2/64, a table of 64 powers of 2 and a Taylor polynomial of
+ * degree 5; error below 2 units in the last place. No library is linked, so the same digits come out wherever it runs.
  */
 #include <stdint.h>
 #include <wasm_simd128.h>
@@ -38,27 +38,42 @@ static inline uint64_t bits(uint64_t s[4]) {
   return result;
 }
 
-static const double LN2_HIGH = 6.93147180369123816490e-01, LN2_LOW = 1.90821492927058770002e-10;
+/* 2^(k/64), correctly rounded, as bits. */
+static const uint64_t powers[64] = {
+  0x3ff0000000000000, 0x3ff02c9a3e778061, 0x3ff059b0d3158574, 0x3ff0874518759bc8, 0x3ff0b5586cf9890f,
+  0x3ff0e3ec32d3d1a2, 0x3ff11301d0125b51, 0x3ff1429aaea92de0, 0x3ff172b83c7d517b, 0x3ff1a35beb6fcb75,
+  0x3ff1d4873168b9aa, 0x3ff2063b88628cd6, 0x3ff2387a6e756238, 0x3ff26b4565e27cdd, 0x3ff29e9df51fdee1,
+  0x3ff2d285a6e4030b, 0x3ff306fe0a31b715, 0x3ff33c08b26416ff, 0x3ff371a7373aa9cb, 0x3ff3a7db34e59ff7,
+  0x3ff3dea64c123422, 0x3ff4160a21f72e2a, 0x3ff44e086061892d, 0x3ff486a2b5c13cd0, 0x3ff4bfdad5362a27,
+  0x3ff4f9b2769d2ca7, 0x3ff5342b569d4f82, 0x3ff56f4736b527da, 0x3ff5ab07dd485429, 0x3ff5e76f15ad2148,
+  0x3ff6247eb03a5585, 0x3ff6623882552225, 0x3ff6a09e667f3bcd, 0x3ff6dfb23c651a2f, 0x3ff71f75e8ec5f74,
+  0x3ff75feb564267c9, 0x3ff7a11473eb0187, 0x3ff7e2f336cf4e62, 0x3ff82589994cce13, 0x3ff868d99b4492ed,
+  0x3ff8ace5422aa0db, 0x3ff8f1ae99157736, 0x3ff93737b0cdc5e5, 0x3ff97d829fde4e50, 0x3ff9c49182a3f090,
+  0x3ffa0c667b5de565, 0x3ffa5503b23e255d, 0x3ffa9e6b5579fdbf, 0x3ffae89f995ad3ad, 0x3ffb33a2b84f15fb,
+  0x3ffb7f76f2fb5e47, 0x3ffbcc1e904bc1d2, 0x3ffc199bdd85529c, 0x3ffc67f12e57d14b, 0x3ffcb720dcef9069,
+  0x3ffd072d4a07897c, 0x3ffd5818dcfba487, 0x3ffda9e603db3285, 0x3ffdfc97337b9b5f, 0x3ffe502ee78b3ff6,
+  0x3ffea4afa2a490da, 0x3ffefa1bee615a27, 0x3fff50765b6e4540, 0x3fffa7c1819e90d8,
+};
+/* ln 2/64 in two parts; the first has room for exact products with whole numbers. */
+static const double STEP_HIGH = 0x1.62e42fee00000p-7, STEP_LOW = 0x1.a39ef35793c76p-39;
 
 /* Two exponentials at once; arguments from -700 to 700, others are held to these ends. */
 static inline v128_t exponentials(v128_t x) {
   x = wasm_f64x2_pmax(wasm_f64x2_pmin(x, wasm_f64x2_splat(700)), wasm_f64x2_splat(-700));
   /* Adding and taking away 1.5 * 2^52 rounds to a whole number, whose bits are then in the low part. */
   const v128_t shift = wasm_f64x2_splat(6755399441055744.0);
-  const v128_t shifted = wasm_f64x2_add(wasm_f64x2_mul(x, wasm_f64x2_splat(1.4426950408889634)), shift);
+  const v128_t shifted = wasm_f64x2_add(wasm_f64x2_mul(x, wasm_f64x2_splat(92.332482616893657)), shift);
   const v128_t n = wasm_f64x2_sub(shifted, shift);
-  v128_t r = wasm_f64x2_sub(x, wasm_f64x2_mul(n, wasm_f64x2_splat(LN2_HIGH)));
-  r = wasm_f64x2_sub(r, wasm_f64x2_mul(n, wasm_f64x2_splat(LN2_LOW)));
-  static const double c[14] = {1.0, 1.0, 1.0 / 2, 1.0 / 6, 1.0 / 24, 1.0 / 120, 1.0 / 720, 1.0 / 5040,
-                               1.0 / 40320, 1.0 / 362880, 1.0 / 3628800, 1.0 / 39916800, 1.0 / 479001600,
-                               1.0 / 6227020800.0};
-#define PAIR(k) wasm_f64x2_add(wasm_f64x2_splat(c[k]), wasm_f64x2_mul(r, wasm_f64x2_splat(c[k + 1])))
-  const v128_t r2 = wasm_f64x2_mul(r, r), r4 = wasm_f64x2_mul(r2, r2), r8 = wasm_f64x2_mul(r4, r4);
-#define JOIN(a, b, by) wasm_f64x2_add(a, wasm_f64x2_mul(b, by))
-  const v128_t low = JOIN(JOIN(PAIR(0), PAIR(2), r2), JOIN(PAIR(4), PAIR(6), r2), r4);
-  const v128_t high = JOIN(JOIN(PAIR(8), PAIR(10), r2), PAIR(12), r4);
-  const v128_t p = JOIN(low, high, r8);
-  return wasm_i64x2_add(p, wasm_i64x2_shl(shifted, 52));
+  v128_t r = wasm_f64x2_sub(x, wasm_f64x2_mul(n, wasm_f64x2_splat(STEP_HIGH)));
+  r = wasm_f64x2_sub(r, wasm_f64x2_mul(n, wasm_f64x2_splat(STEP_LOW)));
+  const v128_t table = wasm_i64x2_make(powers[wasm_i64x2_extract_lane(shifted, 0) & 63],
+                                       powers[wasm_i64x2_extract_lane(shifted, 1) & 63]);
+  const v128_t scale = wasm_i64x2_add(table, wasm_i64x2_shl(wasm_i64x2_shr(shifted, 6), 52));
+  const v128_t r2 = wasm_f64x2_mul(r, r);
+  const v128_t high = wasm_f64x2_add(wasm_f64x2_splat(1.0 / 24), wasm_f64x2_mul(r, wasm_f64x2_splat(1.0 / 120)));
+  const v128_t low = wasm_f64x2_add(wasm_f64x2_splat(0.5), wasm_f64x2_mul(r, wasm_f64x2_splat(1.0 / 6)));
+  const v128_t p = wasm_f64x2_add(r, wasm_f64x2_mul(r2, wasm_f64x2_add(low, wasm_f64x2_mul(r2, high))));
+  return wasm_f64x2_add(scale, wasm_f64x2_mul(scale, p));
 }
 
 static double exponential(double x) {
