@@ -1,4 +1,4 @@
-/** noise-kernel.c as WebAssembly, base64; made by noise-kernel-build.mjs. */
+/** noise-kernel.c as WebAssembly, base64; made by noise-kernel-build.sh. */
 export const noiseKernelBytes: string = [
   "AGFzbQEAAAABHgZgAAF/YAAAYAF8AXxgAX8AYAN/f3wBfGADf3x8AAMIBwAAAQIDBAUFAwEAAgYIAX8BQdDMBgsHRQYGbWVtb3J5",
   "AgALc3RhdGVfcGxhY2UAAAx2YWx1ZXNfcGxhY2UAAQdwcmVwYXJlAAIHbm9ybWFscwAEB2ZhY3RvcnMABgrRHQcIAEGAjICAAAsI",

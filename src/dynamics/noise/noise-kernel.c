@@ -1,5 +1,5 @@
 /*
- * Normal values and lognormal factors, many at a time. Build: noise-kernel-build.mjs.
+ * Normal values and lognormal factors, many at a time. Build: noise-kernel-build.sh.
  *
  * Random bits: xoshiro256++ (Blackman and Vigna 2021, ACM TOMS 47:36).
  * Normal values: ziggurat of 256 layers (Marsaglia and Tsang 2000, J. Stat. Softw. 5:8), with separate bits for

@@ -10,7 +10,6 @@ export const capacity: NamedQuantity = quantity("level at which it stays", "leve
 export const pure = (meaning: string): NamedQuantity => quantity(meaning, "");
 export const inLevels = (meaning: string): NamedQuantity => quantity(meaning, "level");
 export const perLevel = (meaning: string): NamedQuantity => quantity(meaning, "1/level");
-export const perPeriod = (meaning: string): NamedQuantity => quantity(meaning, "1/period");
 export const other = (meaning: string, unit: string): NamedQuantity => quantity(meaning, unit);
 
 export const positive: readonly [number, number] = [0, Number.POSITIVE_INFINITY];
