@@ -49,3 +49,44 @@ export function overflow(page: Page): Promise<{ page: number; texts: string[] }>
     return { page: document.documentElement.scrollWidth - document.documentElement.clientWidth, texts };
   });
 }
+
+/** Texts of a page whose contrast with what is behind them is below a ratio. Source: W3C, WCAG 2.1, 1.4.3. */
+export function faintTexts(page: Page, least: number): Promise<string[]> {
+  return page.evaluate((ratio) => {
+    const channels = (colour: string): number[] => (colour.match(/[\d.]+/g) ?? []).map(Number);
+    const light = (colour: string): number => {
+      const [red = 0, green = 0, blue = 0] = channels(colour).map((value) => {
+        const share = value / 255;
+        return share <= 0.04045 ? share / 12.92 : ((share + 0.055) / 1.055) ** 2.4;
+      });
+      return 0.2126 * red + 0.7152 * green + 0.0722 * blue;
+    };
+    // The nearest ground that is not see-through; light veils over it make no difference that counts.
+    const ground = (element: Element | null): string => {
+      for (let at = element; at !== null; at = at.parentElement) {
+        const colour = getComputedStyle(at).backgroundColor;
+        if ((channels(colour)[3] ?? 1) > 0.5) return colour;
+      }
+      return "rgb(255,255,255)";
+    };
+    const spoken = (element: Element): boolean =>
+      Array.from(element.childNodes).some(
+        (node) => node.nodeType === 3 && (node.textContent ?? "").trim() !== "",
+      );
+    const texts = Array.from(document.querySelectorAll("main *")).filter(
+      (element) => element.getClientRects().length > 0 && spoken(element) && !element.closest("script,style"),
+    );
+    const inPlot = (element: Element): boolean => element.closest("svg") !== null;
+    return texts
+      .filter((element) => {
+        const style = getComputedStyle(element);
+        if (style.opacity === "0" || style.visibility === "hidden") return false;
+        const [dark = 0, bright = 0] = [
+          light(inPlot(element) ? style.fill : style.color),
+          light(ground(element)),
+        ].sort((a, b) => a - b);
+        return (bright + 0.05) / (dark + 0.05) < ratio;
+      })
+      .map((element) => `${element.tagName} ${(element.textContent ?? "").slice(0, 40)}`);
+  }, least);
+}

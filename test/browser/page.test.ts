@@ -11,7 +11,7 @@ import { writePage } from "../../src/casework/page/write-page.js";
 import { figuresOfEveryKind } from "../figures/all-kinds.js";
 import { browserThere, openBrowser, openPage } from "./browser.js";
 import { figureCount, galleryNotebook, tablesOfEveryKind } from "./gallery.js";
-import { overflow, seenFigures } from "./looked-at.js";
+import { faintTexts, overflow, seenFigures } from "./looked-at.js";
 
 const folder = mkdtempSync(join(tmpdir(), "periodwise-page-"));
 const file = join(folder, "page.html");
@@ -66,6 +66,19 @@ describe.runIf(browserThere)("our page, with every kind of figure and table", ()
       expect(seen[i]?.alternative).toContain("Across:");
     });
     expect(await page.locator(".pw-figure details table").count()).toBeGreaterThanOrEqual(figureCount);
+    await page.close();
+  });
+
+  test("every text, in plots too, stands out at 4.5 to 1", async () => {
+    const { page } = await openPage(browser, pathToFileURL(file).href, 1280);
+    await page.waitForFunction(
+      (count) => document.querySelectorAll(".pw-live .main-svg").length >= count,
+      figureCount,
+    );
+    await page.evaluate(() => {
+      for (const folded of Array.from(document.querySelectorAll("details"))) folded.open = true;
+    });
+    expect(await faintTexts(page, 4.5)).toEqual([]);
     await page.close();
   });
 
