@@ -40,6 +40,7 @@ describe("an interrupt", () => {
     ["a loop inside a function of an earlier cell", "kept += 1;\nawait null;\n(() => { while (true) ; })();"],
     ["a loop that waits", "kept += 1;\nfor (;;) await new Promise(r => setTimeout(r, 5));"],
     ["a loop that catches everything", "kept += 1;\nfor (;;) { try { for (;;) {} } catch {} }"],
+    ["a loop in a package after a wait", 'import { busy } from "busy";\nawait null;\nkept += 1;\nbusy();'],
     ["a loop in a package, which has no checks", 'import { busy } from "busy";\nkept += 1;\nbusy();'],
   ])("stops %s and keeps what was set", async (_, code) => {
     const before = Number((await kernel.run("kept")).value);

@@ -64,7 +64,7 @@ export function cellCompiler(folder: string, packages: readonly OwnPackage[]): C
       return converter.complete(declarations, text, position);
     },
     inspect: (declarations, text, position) => {
-      typescript.addLanguageDocs();
+      typescript.addDocs();
       prepare(text);
       return converter.inspect(declarations, text, position);
     },

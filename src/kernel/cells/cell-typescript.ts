@@ -1,14 +1,13 @@
 import { createRequire } from "node:module";
-import { dirname, join } from "node:path";
+import { join } from "node:path";
 import type ts from "typescript-cell";
 import { cellBuilder } from "./cell-builder.js";
-import { cellGlobals, smallNodeGlobals } from "./cell-globals.js";
 import { cellOptions } from "./cell-options.js";
 import { type CellResolution, cellResolution } from "./cell-resolution.js";
 import { compilerLibrary, compilerPath } from "./compiler-library.js";
+import { declarationTexts } from "./declaration-texts.js";
 import { exportedText } from "./exported-text.js";
 import type { OwnPackage } from "./installation.js";
-import { isInLanguageLibrary, languageLibrary, languageLibraryName } from "./language-library.js";
 import { type SecondStage, secondStage } from "./second-stage.js";
 import { withHints } from "./type-hints.js";
 import { type WatchedFiles, watchedFiles } from "./watched-files.js";
@@ -21,8 +20,8 @@ export interface CellTypescript {
   readonly finderOf: SecondStage["finderOf"];
   /** From now on cells may name everything that Node declares. */
   readonly addNodeTypes: () => void;
-  /** From now on the language's own declarations have their docstrings. */
-  readonly addLanguageDocs: () => void;
+  /** From now on the declarations of the language and of our package have their docstrings. */
+  readonly addDocs: () => void;
   /** Does work on a cell that is to be run, not only looked at. */
   readonly compiling: <T>(work: () => T) => T;
   /** Keeps for the next start what makes it faster. */
@@ -38,9 +37,9 @@ export function cellTypescript(folder: string, packages: readonly OwnPackage[]):
   const files = watchedFiles(library, folder);
   const resolution = cellResolution(library, folder, library.sys);
   const stage = secondStage(library);
-  const texts = virtualTexts(folder);
+  const texts = declarationTexts(folder);
   const exported = exportedText(library);
-  const cellFile = inFolder(folder, "__tslab__.ts");
+  const cellFile = join(folder, "__tslab__.ts").replaceAll("\\", "/");
   let compiles = false;
 
   const altered = {
@@ -50,7 +49,7 @@ export function cellTypescript(folder: string, packages: readonly OwnPackage[]):
       watchFile: files.watchFile,
       watchDirectory: () => ({ close: () => undefined }),
       readFile: (path: string, encoding?: string) => texts.read(path) ?? library.sys.readFile(path, encoding),
-      fileExists: (path: string) => texts.read(path) !== undefined || library.sys.fileExists(path),
+      fileExists: (path: string) => texts.isVirtual(path) || library.sys.fileExists(path),
     },
     createWatchCompilerHost: (
       roots: string[],
@@ -92,10 +91,10 @@ export function cellTypescript(folder: string, packages: readonly OwnPackage[]):
     resolution,
     finderOf: stage.finderOf,
     addNodeTypes: () => {
-      if (texts.addNodeTypes()) files.report(texts.globalsFile);
+      for (const path of texts.addNodeTypes()) files.report(path);
     },
-    addLanguageDocs: () => {
-      if (texts.addLanguageDocs()) files.report(texts.libraryFile);
+    addDocs: () => {
+      for (const path of texts.addDocs()) files.report(path);
     },
     compiling: (work) => {
       compiles = true;
@@ -110,48 +109,3 @@ export function cellTypescript(folder: string, packages: readonly OwnPackage[]):
 }
 
 type PreEmitDiagnostics = (program: ts.Program, files: readonly ts.SourceFile[]) => readonly ts.Diagnostic[];
-
-/** Files that the compiler reads and that are nowhere on disk. */
-interface VirtualTexts {
-  readonly globalsFile: string;
-  readonly libraryFile: string;
-  readonly read: (path: string) => string | undefined;
-  /** False when they were added before. */
-  readonly addNodeTypes: () => boolean;
-  readonly addLanguageDocs: () => boolean;
-}
-
-function virtualTexts(folder: string): VirtualTexts {
-  const globalsFile = inFolder(folder, "__globals__.d.ts");
-  const libraryFile = inFolder(dirname(compilerPath), languageLibraryName);
-  let language = languageLibrary(compilerPath, false);
-  let nodeTypes = false;
-  let languageDocs = false;
-  return {
-    globalsFile,
-    libraryFile,
-    read: (path) => {
-      if (path === globalsFile) {
-        // A reference counts only before everything else.
-        return nodeTypes ? `/// <reference types="node" />\n${cellGlobals}` : cellGlobals + smallNodeGlobals;
-      }
-      if (path === libraryFile) return language;
-      return isInLanguageLibrary(compilerPath, path) ? "" : undefined;
-    },
-    addNodeTypes: () => {
-      const added = !nodeTypes;
-      nodeTypes = true;
-      return added;
-    },
-    addLanguageDocs: () => {
-      const added = !languageDocs;
-      if (added) language = languageLibrary(compilerPath, true);
-      languageDocs = true;
-      return added;
-    },
-  };
-}
-
-function inFolder(folder: string, name: string): string {
-  return join(folder, name).replaceAll("\\", "/");
-}

@@ -1,0 +1,67 @@
+// A sample of what cells write, compiled by the compiler that cells are checked with. Each line marked as an error
+// must be one: it proves that the value above it has a type and is not taken for anything at all.
+import { DataFrame } from "danfojs-node";
+import {
+  compare,
+  fit,
+  forecast,
+  leastSquares,
+  observations,
+  reaches,
+  readRecord,
+  recurrence,
+} from "periodwise";
+
+const counts = observations(
+  { hour: [0, 1, 2, 3, 4, 5], density: [2, 3.9, 7.6, 14, 24, 38] },
+  { period: "hour", step: { every: 1, of: "hour" }, value: "density", unit: "10^4 cells/mL" },
+);
+const rule = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)");
+const constants: readonly string[] = rule.constants;
+// @ts-expect-error
+const constantsAreNoNumber: number = rule.constants;
+
+const fitted = fit(rule, counts, { errors: "observation", spread: "proportional" });
+const kind: "fit" = fitted.kind;
+// @ts-expect-error
+const fitIsNoText: string = fitted;
+// @ts-expect-error
+fit(rule, counts, { errors: "neither" });
+// @ts-expect-error
+fit(rule, counts, { errors: "process", spred: "constant" });
+
+const rivals = compare([fitted, fitted]);
+// @ts-expect-error
+const comparisonIsNoNumber: number = rivals;
+
+const ahead = forecast(fitted, { periods: 12 });
+const ready = reaches(ahead, { state: "N", value: 60, direction: "rising" });
+const sentence: string = ready.sentence;
+// @ts-expect-error
+const sentenceIsNoNumber: number = ready.sentence;
+
+const solved = leastSquares({ residuals: ([a = 0]) => Float64Array.of(a - 1), start: [0] });
+const estimate: number = solved.estimates[0] ?? Number.NaN;
+// @ts-expect-error
+const estimatesAreNoText: string = solved.estimates;
+
+async function table(): Promise<DataFrame> {
+  const frame = await readRecord("record.csv");
+  const rows: number = frame.shape[0] ?? 0;
+  // @ts-expect-error
+  const shapeIsNoText: string = frame.shape;
+  return new DataFrame([[rows, shapeIsNoText]]);
+}
+
+export {
+  comparisonIsNoNumber,
+  constants,
+  constantsAreNoNumber,
+  estimate,
+  estimatesAreNoText,
+  fitIsNoText,
+  kind,
+  sentence,
+  sentenceIsNoNumber,
+  table,
+};
