@@ -113,6 +113,23 @@ describe("compare", () => {
     );
   });
 
+  test("rules that name their state differently are compared, forecasts and all", () => {
+    const owed = recurrence("owed[t+1] = R*owed/(1 + (R - 1)*owed/K)");
+    const compared = compare([fit(owed, culture, onLog), fit(crowding, culture, onLog)]);
+    expect(compared.verdict.rules).toContain(owed.text);
+    expect(compared.rollingOrigin!.forecasts).toBeGreaterThan(0);
+  });
+
+  test("says where a naive forecast came closer than the rules", () => {
+    const line = Float64Array.from({ length: 20 }, (_, t) => 10 + 2 * t);
+    const noisy = line.map((value, t) => value + (t % 2 === 0 ? 0.01 : -0.01));
+    const options: FitOptions = { errors: "process" };
+    const fits = [recurrence("N[t+1] = R*N"), recurrence("N[t+1] = R*N^b")].map((rule) =>
+      fit(rule, series(noisy), options),
+    );
+    expect(compare(fits).sentence).toMatch(/"last change" came closer than|clearly worse than "last change"/);
+  });
+
   test("the weights add up to 1, and a change of unit moves no difference", () => {
     const scale = (factor: number): ReturnType<typeof compare> =>
       compare(

@@ -30,5 +30,7 @@ test("finds density dependence in 5% of records that grow by chance alone", () =
 });
 
 test("passes over pairs across a gap, and refuses levels without a logarithm", () => {
-  expect(() => densityDependence(series([3, 4, 0, 5, 6, 7, 8]))).toThrowErrorMatchingInlineSnapshot(`[ModelError: The test needs at least four steps of one period between positive levels of N. Leave out levels of zero with a reason, name the state with { state }, or wait for more rows.]`);
+  expect(() => densityDependence(series([3, 4, 0, 5, 6, 7, 8]))).toThrowErrorMatchingInlineSnapshot(
+    `[ModelError: The test needs at least four steps of one period between positive levels of N. Leave out levels of zero with a reason, name the state with { state }, or wait for more rows.]`,
+  );
 });

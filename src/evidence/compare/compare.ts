@@ -58,8 +58,8 @@ export function compare(fits: readonly Fit[], options: CompareOptions = {}): Com
   const scalesDiffer = new Set(fits.map((fit) => fit.options.spread ?? "constant")).size > 1;
   const rows = comparisonRows(fits, scalesDiffer);
   const rolled = rollingOrigin(fits, planOf(first, options));
-  const { verdict, sentence } = comparisonVerdict(fits, rows, rolled);
-  const decisions = decisionsOf(fits, verdict, options.decide);
+  const { verdict, standing, sentence } = comparisonVerdict(fits, rows, rolled);
+  const decisions = decisionsOf(fits, standing, options.decide);
   return Object.freeze({
     kind: "comparison",
     rows: Object.freeze(rows),
@@ -104,14 +104,11 @@ function refuseUnlike(first: Fit, other: Fit): void {
 
 function decisionsOf(
   fits: readonly Fit[],
-  verdict: ComparisonVerdict,
+  standing: readonly ComparisonRow[],
   decide: CompareOptions["decide"],
 ): RivalDecision[] {
   if (decide === undefined) return [];
-  return verdict.rules.map((rule) => ({
-    rule,
-    decision: decide(fits.find((fit) => fit.rule.text === rule)!),
-  }));
+  return standing.map(({ rule, place }) => ({ rule, decision: decide(fits[place]!) }));
 }
 
 function decisionText({ kind }: ComparisonVerdict, decisions: readonly RivalDecision[]): string[] {

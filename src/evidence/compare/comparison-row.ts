@@ -2,6 +2,8 @@ import type { Fit } from "../../estimate/index.js";
 
 /** One rival of a comparison. Sums run over the groups, each with its own constants and sigma. */
 export interface ComparisonRow {
+  /** Which of the fits given, from 0. */
+  readonly place: number;
   readonly rule: string;
   /** n: values compared, of all groups. */
   readonly count: number;
@@ -29,19 +31,22 @@ type GroupFit = Fit["groups"][number];
  * @param ownScale - brings fits on the log scale back to the record's own by the Jacobian, -sum ln y.
  */
 export function comparisonRows(fits: readonly Fit[], ownScale: boolean): readonly ComparisonRow[] {
-  const raw = fits.map((fit) => rowOf(fit, ownScale)).sort((a, b) => a.aicCorrected - b.aicCorrected);
+  const raw = fits
+    .map((fit, place) => rowOf(fit, place, ownScale))
+    .sort((a, b) => a.aicCorrected - b.aicCorrected);
   const lowest = raw[0]!.aicCorrected;
   const weight = (row: { aicCorrected: number }): number => Math.exp((lowest - row.aicCorrected) / 2) || 0;
   const total = raw.reduce((sum, row) => sum + weight(row), 0);
   return raw.map((row) => ({ ...row, difference: row.aicCorrected - lowest, weight: weight(row) / total }));
 }
 
-function rowOf(fit: Fit, ownScale: boolean): Omit<ComparisonRow, "difference" | "weight"> {
+function rowOf(fit: Fit, place: number, ownScale: boolean): Omit<ComparisonRow, "difference" | "weight"> {
   const sum = (of: (group: GroupFit) => number): number =>
     fit.groups.reduce((total, group) => total + of(group), 0);
   const jacobian = ownScale && fit.options.spread === "proportional" ? sum(logOfValues) : 0;
   const logLikelihood = sum((group) => group.criteria.logLikelihood) - jacobian;
   return {
+    place,
     rule: fit.rule.text,
     count: sum((group) => group.count),
     unknowns: sum((group) => group.estimates.length),

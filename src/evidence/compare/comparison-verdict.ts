@@ -2,6 +2,7 @@ import type { Fit } from "../../estimate/index.js";
 import { isWorse } from "../forecasts/is-worse.js";
 import type { RollingOrigin } from "../forecasts/rolling-origin.js";
 import type { ComparisonRow } from "./comparison-row.js";
+import { betterNaive, noneAdequate, standingSentence } from "./comparison-words.js";
 import { naiveCriteria } from "./naive-criteria.js";
 
 /** What a comparison comes to. */
@@ -9,6 +10,13 @@ export interface ComparisonVerdict {
   readonly kind: "supported" | "undecided" | "none-adequate";
   /** The rule, or the rules not told apart; empty where none is adequate. */
   readonly rules: readonly string[];
+}
+
+/** A verdict with the rivals that stand and the words for it. */
+export interface Judgement {
+  readonly verdict: ComparisonVerdict;
+  readonly standing: readonly ComparisonRow[];
+  readonly sentence: string;
 }
 
 /** Differences of AICc within which rivals are not told apart. */
@@ -21,42 +29,29 @@ export function comparisonVerdict(
   fits: readonly Fit[],
   rows: readonly ComparisonRow[],
   rolled: RollingOrigin | undefined,
-): { readonly verdict: ComparisonVerdict; readonly sentence: string } {
-  const close = rows.filter((row) => row.difference <= undecidedWithin).map((row) => row.rule);
-  const failings = close.map((rule) => failingOf(fits.find((fit) => fit.rule.text === rule)!, rolled));
+): Judgement {
+  const close = rows.filter((row) => row.difference <= undecidedWithin);
+  const failings = close.map((row) => failingOf(fits[row.place]!, row, rolled));
   const standing = close.filter((_, i) => failings[i] === undefined);
-  if (standing.length === 0) {
-    const sentence = `None adequate: ${failings[0]}. Forecast without a rule, or look for what the record leaves out.`;
-    return { verdict: { kind: "none-adequate", rules: [] }, sentence };
-  }
+  if (standing.length === 0)
+    return { verdict: { kind: "none-adequate", rules: [] }, standing, sentence: noneAdequate(failings[0]!) };
   const kind = standing.length > 1 ? "undecided" : "supported";
-  return { verdict: { kind, rules: standing }, sentence: sentenceOf(standing, rows) };
+  const sentence = [standingSentence(standing, rows, undecidedWithin), ...betterNaive(standing, rolled)].join(
+    " ",
+  );
+  return { verdict: { kind, rules: standing.map((row) => row.rule) }, standing, sentence };
 }
 
 /** Why a rule is not adequate; undefined where it is. */
-function failingOf(fit: Fit, rolled: RollingOrigin | undefined): string | undefined {
+function failingOf(fit: Fit, row: ComparisonRow, rolled: RollingOrigin | undefined): string | undefined {
   const { own, naive } = naiveCriteria(fit);
   const best = naive.reduce((low, next) => (next.aicCorrected < low.aicCorrected ? next : low));
   if (best.aicCorrected <= own)
-    return `"${best.name}" explains the record as well as "${fit.rule.text}" and needs fewer constants`;
-  const scores = rolled?.scores.find(({ name, kind }) => kind === "rule" && name === fit.rule.text);
+    return `"${best.name}" explains the record as well as "${row.rule}" and needs fewer constants`;
+  const scores = rolled?.scores[row.place];
   const worse = rolled?.scores.find(
     (other) => other.kind === "naive" && scores !== undefined && isWorse(scores.each, other.each, clearly),
   );
   if (worse === undefined) return undefined;
-  return `forecasts of "${fit.rule.text}" from earlier parts of the record did clearly worse than "${worse.name}"`;
-}
-
-function sentenceOf(standing: readonly string[], rows: readonly ComparisonRow[]): string {
-  const quoted = standing.map((rule) => `"${rule}"`);
-  const [best] = standing;
-  if (standing.length > 1) {
-    const last = rows.filter((row) => standing.includes(row.rule)).pop()!;
-    const list = `${quoted.slice(0, -1).join(", ")} and ${quoted[quoted.length - 1]}`;
-    return `Undecided: the record does not tell ${list} apart (AICc ${last.difference.toFixed(1)} between them; within ${undecidedWithin} is no evidence). Carry ${standing.length === 2 ? "both" : "all"} forward.`;
-  }
-  const own = rows.find((row) => row.rule === best)!;
-  const next = rows.find((row) => row.rule !== best && row.aicCorrected >= own.aicCorrected);
-  if (next === undefined) return `The record supports "${best}".`;
-  return `The record supports "${best}"; the next rival, "${next.rule}", lies ${(next.aicCorrected - own.aicCorrected).toFixed(1)} behind in AICc.`;
+  return `forecasts of "${row.rule}" from earlier parts of the record did clearly worse than "${worse.name}"`;
 }
