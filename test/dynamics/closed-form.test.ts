@@ -111,6 +111,13 @@ test("repeated dosing reaches its peak and trough", () => {
   expect(closedFormAt(form, 200)["M"]! - 500).toBeCloseTo(328.981543589, 8);
 });
 
+// Source: the same algebra with the interval equal to the half-life: the n-th peak is D(2 - 2^(1 - n)), exact.
+test("dosing once a half-life doubles the dose in the long run", () => {
+  const form = closedForm(rules.dosing(), { constants: { rho: 0.5, D: 500 }, initial: { M: 500 } });
+  for (let n = 1; n <= 20; n++)
+    expect(closedFormAt(form, n - 1)["M"]).toBeCloseTo(500 * (2 - 2 ** (1 - n)), 10);
+});
+
 test("where no closed form is known it is said so", () => {
   expect(() =>
     closedForm(rules.ricker(), { constants: { r: 1, K: 10 }, initial: { N: 1 } }),
