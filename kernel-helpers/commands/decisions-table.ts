@@ -13,7 +13,11 @@ export function decisionsTable(decisions: readonly Decision[]): Table {
       { key: "why", label: "Why", kind: "text" },
       { key: "who", label: "Who", kind: "text" },
     ],
-    rows: decisions.map((decision) => ({ ...decision, column: decision.column || "whole row" })),
+    rows: decisions.map((decision) => ({
+      ...decision,
+      column: decision.column || "whole row",
+      now: decision.now ?? "left out",
+    })),
     notes: decisions.length === 0 ? ["The record is used as it was read."] : [],
     format: { group: "" },
   });

@@ -13,7 +13,7 @@ export function findingsList(findings: readonly Finding[]): object | undefined {
       { key: "message", label: "What was found", kind: "text" },
       { key: "done", label: "What was done", kind: "text" },
     ],
-    rows: findings.map(({ row, message, done }) => ({ row, message, done })),
+    rows: findings.map(({ row, message, done }) => ({ row: row ?? "all", message, done })),
     limit: listed,
     format: { group: "" },
   });

@@ -38,6 +38,7 @@ export function observations(table: ColumnTable, options: ObservationOptions): O
   if (read === 0) throw noDataRows();
   if (options?.period === undefined)
     throw optionMissing("period", 'Name the period column: period: "month".');
+  const { identities, measured = "level" } = options;
   const log = findingLog();
   noteDecisions(table, log);
   const used = decided(table);
@@ -51,9 +52,8 @@ export function observations(table: ColumnTable, options: ObservationOptions): O
   const groups = rows.map((group) => observedGroup(group, columns, axis, used, options, log));
   const kept = groups.filter(({ group }) => group.index.length > 0).map(({ group }) => group);
   if (kept.length === 0) throw noUsableRows(taken.length);
-  noteSteps(kept, axis, log);
+  noteSteps(kept, axis, measured, log);
   noteMonthEnds(kept, axis, log);
-  const { identities, measured = "level" } = options;
   if (identities)
     checkIdentities(
       used,
@@ -88,10 +88,11 @@ function rowsWhere(table: ColumnTable, where: ObservationOptions["where"] = {}):
 function noteDecisions({ decisions = [] }: ColumnTable, log: FindingLog): void {
   for (const decision of decisions) {
     const { row, column, was, now, why, who } = decision;
-    const what =
-      column === ""
-        ? `Row ${row} is left out`
-        : `Row ${row}, ${column}: ${now ?? "nothing"} is used instead of ${was ?? "nothing"}`;
+    const used =
+      now === null
+        ? `${was ?? "an empty cell"} is not used`
+        : `${now} is used instead of ${was ?? "an empty cell"}`;
+    const what = column === "" ? `Row ${row} is left out` : `Row ${row}, ${column}: ${used}`;
     const by = who === "" ? "" : ` (${who})`;
     log.note({
       kind: "corrected",

@@ -68,6 +68,17 @@ describe("a calendar", () => {
     );
   });
 
+  test("of 4-4-5 trading periods says of flows that they compare per week only", () => {
+    const table = tableOf({ year: [2025, 2025], period: [1, 2], sold: [40, 38] });
+    const found = observations(table, {
+      period: ["year", "period"],
+      step: "4-4-5",
+      value: "sold",
+      measured: "flow",
+    }).findings;
+    expect(found.map(({ kind }) => kind)).toEqual(["uneven-periods"]);
+  });
+
   test("of half hours takes times of day", () => {
     expect(
       indexes(

@@ -5,12 +5,18 @@ import { listText, unitText } from "./unit-text.js";
 import { stepText } from "./whole-steps.js";
 
 /** Notes gaps row by row, and once for the record which lengths of step occur besides the single one. */
-export function noteSteps(groups: readonly ObservedGroup[], axis: PeriodAxis, log: FindingLog): void {
+export function noteSteps(
+  groups: readonly ObservedGroup[],
+  axis: PeriodAxis,
+  measured: "level" | "flow",
+  log: FindingLog,
+): void {
   const counts = new Map<number, number>();
   for (const group of groups) {
     noteGaps(group, counts, axis, log);
     if (group.index.length === 1) noteSingle(group, axis, log);
   }
+  if (axis.calendar.name === "4-4-5" && measured === "flow") noteUneven(axis, log);
   const lengths = [...counts.keys()].sort((a, b) => a - b);
   if (lengths.length > 0 && lengths[0]! > 1) noteShortStep(lengths[0]!, axis, log);
   else if (lengths.length > 1) noteMixed(lengths, counts, axis, log);
@@ -97,6 +103,17 @@ function noteMixed(
     axis,
     `Steps of ${listText(occur)} ${unitText(2, of).slice(2)}${more} occur: the rule is applied per ${stepText(axis)}; ${listText(told)}.`,
     "longer ones used as multi-step pairs",
+    log,
+  );
+}
+
+/** (Common practice of retailers' calendars, no source.) */
+function noteUneven(axis: PeriodAxis, log: FindingLog): void {
+  wholeRecord(
+    "uneven-periods",
+    axis,
+    "Periods of a 4-4-5 calendar hold four, four and five weeks, and in some years one of six: flows compare only per week.",
+    "kept as recorded",
     log,
   );
 }

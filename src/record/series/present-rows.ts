@@ -25,6 +25,6 @@ function noteMissing(row: number, column: string, axis: PeriodAxis, log: Finding
     column,
     value: "",
     message: `Row ${row + 1}, ${column}: empty at ${axis.column} ${axis.written(row)}. A missing value is not zero.`,
-    done: "left out; the period stays a gap",
+    done: "left out",
   });
 }

@@ -59,42 +59,40 @@ function filledSeries(
   index: Int32Array,
   values: Float64Array,
   rule: FillRule,
-): readonly { value: number; was: boolean }[] {
-  const known = new Map(
-    Array.from(index, (step, i) => [step, values[rows[i]!]!]).filter(([, value]) => !Number.isNaN(value)) as [
-      number,
-      number,
-    ][],
+): readonly FilledCell[] {
+  const known = Array.from(index, (step, i): readonly [number, number] => [step, values[rows[i]!]!]).filter(
+    ([, value]) => !Number.isNaN(value),
   );
-  const steps = [...known.keys()];
+  let next = 0;
   return Array.from({ length: index[index.length - 1]! + 1 }, (_, step) => {
-    const value = known.get(step);
-    if (value !== undefined) return { value, was: true };
-    const before = steps.filter((at) => at < step).at(-1);
-    const after = steps.find((at) => at > step);
-    return { value: fill(rule, step, known, before, after), was: false };
+    while (next < known.length && known[next]![0] < step) next++;
+    const after = known[next];
+    if (after?.[0] === step) return { value: after[1], was: true };
+    return { value: fill(rule, step, known[next - 1], after), was: false };
   });
 }
 
-function fill(
-  rule: FillRule,
-  step: number,
-  known: ReadonlyMap<number, number>,
-  before: number | undefined,
-  after: number | undefined,
-): number {
+interface FilledCell {
+  readonly value: number;
+  /** Whether it was recorded. */
+  readonly was: boolean;
+}
+
+/** Step and value of the recorded cell before and after an empty one. */
+type Known = readonly [number, number] | undefined;
+
+function fill(rule: FillRule, step: number, before: Known, after: Known): number {
   if (typeof rule === "number") return rule;
   if (before === undefined || (rule === "between" && after === undefined)) return Number.NaN;
-  const from = known.get(before)!;
-  if (rule === "previous") return from;
-  return from + ((known.get(after!)! - from) * (step - before)) / (after! - before);
+  if (rule === "previous") return before[1];
+  return before[1] + ((after![1] - before[1]) * (step - before[0])) / (after![0] - before[0]);
 }
 
 function assembled(
   { table, axis, by }: PlacedTable,
   column: string,
   rows: readonly PeriodRow[],
-  cells: readonly { readonly value: number; readonly was: boolean }[],
+  cells: readonly FilledCell[],
 ): ColumnTable {
   const every = axis.calendar.step.every;
   const cellOf = (name: string, source: Column, at: PeriodRow, i: number): unknown => {
