@@ -1,9 +1,10 @@
 import { type Rule, roughness } from "../rule/index.js";
-import type { FitOptions } from "./fit-options.js";
+import { bySquares, type FitOptions } from "./fit-options.js";
 import {
   refuseFactor,
   refuseJumps,
   refuseMissingErrors,
+  refuseRobust,
   refuseSpread,
   refuseUnknownSpread,
 } from "./refusals.js";
@@ -16,6 +17,8 @@ export function checkOptions(rule: Rule, options: FitOptions): void {
   if (!errorKinds.includes(options?.errors)) throw refuseMissingErrors();
   checkSpread(options);
   if (options.factor !== undefined && options.errors !== "observation") throw refuseFactor(options.errors);
+  const alone = (options.groups ?? "separate") === "separate";
+  if (options.robust === true && !(bySquares(options) && alone)) throw refuseRobust();
   const [jump] = roughness(rule).jumps;
   if (jump !== undefined) throw refuseJumps(jump.function, rule.text);
 }

@@ -9,12 +9,16 @@ export function conventionsOf(options: FitOptions, groups: readonly GroupFit[]):
     ...(filter ? [filterSentence(filter)] : []),
     spreadSentence(options),
     intervalSentence(options, groups),
+    ...(options.robust === true ? [robustSentence] : []),
     ...groupSentence(options),
     ...(options.factor === undefined
       ? []
       : ["The record reads a state up to a factor, which counts as an unknown."]),
   ];
 }
+
+const robustSentence =
+  "Values more than 1.345 robust standard deviations off count for less (Huber's weights); errors and intervals take the weights as given.";
 
 function errorSentence({ errors }: FitOptions): string {
   if (errors === "observation")

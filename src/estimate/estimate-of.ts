@@ -15,6 +15,7 @@ export interface Estimate {
   /** Undefined where the record does not determine it. */
   readonly standardError: number | undefined;
   readonly profile: Interval;
+  /** Absent where the profile is so lopsided that a symmetric interval would mislead. */
   readonly wald: Interval | undefined;
   /** By increasing value: the increase over the optimum, in units of sigma^2; cut by `cut`. */
   readonly trace: Profile["trace"];
@@ -49,10 +50,22 @@ export function estimatesOf(
       value,
       standardError,
       profile: profile === undefined ? notComputed(level) : intervalOf(profile, rooted, level),
-      wald: waldInterval(value, standardError, reach, level),
+      wald: isNearParabola(found.at[i]!, profile)
+        ? waldInterval(value, standardError, reach, level)
+        : undefined,
       trace: (profile?.trace ?? []).map((at) => ({ ...at, value: reported(rooted, at.value) })),
     };
   });
+}
+
+/** Sides of a profile whose lengths differ by more than this factor are no parabola: common practice, no source. */
+const lopsided = 1.5;
+
+/** Whether a symmetric interval says about what the profile says. */
+function isNearParabola(at: number, profile: Profile | undefined): boolean {
+  if (profile?.lower === undefined || profile.upper === undefined) return profile === undefined;
+  const ratio = (profile.upper - at) / (at - profile.lower);
+  return ratio < lopsided && ratio > 1 / lopsided;
 }
 
 function intervalOf({ lower, upper, note }: Profile, rooted: boolean, level: number): Interval {

@@ -29,6 +29,8 @@ export interface FitOptions {
   readonly initial?: Readonly<Record<string, number | readonly number[]>>;
   /** By state: the name of an unknown factor by which the record reads it, as `{ B: "q" }`: recorded = q * B. */
   readonly factor?: Readonly<Record<string, string>>;
+  /** Lets values far off the rule count for less (Huber's weights), in fits by least squares; default false. */
+  readonly robust?: boolean;
   /** `separate` (default): every group on its own; `combined`: the same constants for all; `mixed`: a spread among them. */
   readonly groups?: "separate" | "combined" | "mixed";
   /** Intervals by profile (default), or none, where many fits are made and only estimates are wanted. */

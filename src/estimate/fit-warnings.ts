@@ -29,7 +29,7 @@ export function fitWarnings(fit: Omit<GroupFit, "warnings">, context: FitContext
     ...atBounds(fit, context.unknowns),
     ...rivals(fit),
     ...correlated(fit),
-    ...bends(context.rule),
+    ...bends(fit, context.rule),
     ...slopeWarnings(fit, context),
     ...fewValues(fit),
   ];
@@ -135,13 +135,15 @@ function correlated(fit: Omit<GroupFit, "warnings">): Warning[] {
 
 const pair = (a: Estimate, b: Estimate): string => `${a.name} and ${b.name}`;
 
-function bends(rule: Rule): Warning[] {
+/** At a smooth optimum the search ends on its gradient; on a bend of the rule it cannot. */
+function bends(fit: Omit<GroupFit, "warnings">, rule: Rule): Warning[] {
   const [bend] = roughness(rule).kinks;
-  if (bend === undefined) return [];
+  const smooth = fit.stop.kind === "converged" && fit.stop.test === "gradient";
+  if (bend === undefined || smooth) return [];
   return [
     {
-      code: "rule-bends",
-      message: `The rule bends at ${bend.function}(...): where a fit sits on the bend its standard errors do not hold. Read the profiles.`,
+      code: "on-a-bend",
+      message: `The fit sits where the rule bends, at ${bend.function}(...): its standard errors do not hold there. Read the profiles.`,
     },
   ];
 }

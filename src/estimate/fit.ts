@@ -35,7 +35,8 @@ export interface Fit {
  * @param observations - per group at least as many values (pairs) as unknowns + 3; gaps stay gaps.
  * @returns estimates with standard errors (sigma^2 = RSS/(n - p)), profile and Wald intervals, residuals, stop
  *   reason and warnings, a group at a time.
- * @throws {ModelError} `errors-not-stated` | `unknown-spread` | `bad-spread` | `factor-without-trajectory` | `rule-jumps` |
+ * @throws {ModelError} `errors-not-stated` | `unknown-spread` | `bad-spread` | `factor-without-trajectory` |
+ *   `robust-not-by-squares` | `rule-jumps` |
  *   `states-not-recorded` | `too-few-observations` | `no-change` | `no-logarithm` | `not-a-count` | `all-censored` |
  *   `no-finite-start` | `unknown-name` | `start-outside-bounds` | `input-not-recorded` | `input-missing-in-period`.
  * @see Bates, D. M. and Watts, D. G. (1988), Nonlinear Regression Analysis and Its Applications, chapters 2 and 6.

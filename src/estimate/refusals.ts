@@ -154,8 +154,8 @@ export function refuseFactor(errors: string): ModelError {
 export function refuseResampling(): ModelError {
   return new ModelError(
     "not-by-least-squares",
-    "Records are simulated anew from fits by least squares of each group on its own. This fit was made by another likelihood, or of " +
-      "groups together: read its profiles.",
+    "Records are simulated anew from fits by least squares of each group on its own. This fit was made by another likelihood, of " +
+      "groups together, or robustly: read its profiles.",
   );
 }
 
@@ -204,5 +204,13 @@ export function refuseNoResiduals(): ModelError {
   return new ModelError(
     "no-residuals",
     'A fit with errors in both has predictions, not residuals, so they cannot be drawn anew. Use bootstrap(fit, { errors: "parametric" }).',
+  );
+}
+
+export function refuseRobust(): ModelError {
+  return new ModelError(
+    "robust-not-by-squares",
+    'Far-off values count for less only in fits by least squares of each group on its own. Drop { robust: true }, or fit with a "constant" ' +
+      'or "proportional" spread and { groups: "separate" }.',
   );
 }

@@ -60,7 +60,9 @@ const notLeastSquares = "No second solver: the fit is not one of least squares o
 
 function isOneLeastSquares({ options }: Fit, { estimates }: GroupFit): boolean {
   const alone = (options.groups ?? "separate") === "separate";
-  return alone && bySquares(options) && estimates.every(({ role }) => role !== "spread");
+  return (
+    alone && options.robust !== true && bySquares(options) && estimates.every(({ role }) => role !== "spread")
+  );
 }
 
 function opinionOf(ours: readonly number[], theirs: readonly number[]): SecondOpinion {

@@ -202,3 +202,47 @@ test("the same record and options give the same digits", () => {
   const again = fit(sheltered, record({ N: values }), { errors: "observation", spread: "proportional" });
   expect(JSON.stringify(again.groups)).toBe(JSON.stringify(once.groups));
 });
+
+describe("a robust fit", () => {
+  test("is hardly moved by one wild value, names it, and agrees with least squares without it", () => {
+    const wild = values.map((value, t) => (t === 6 ? 150 : value));
+    const plain = fit(sheltered, record({ N: wild }), { errors: "observation" });
+    const robust = fit(sheltered, record({ N: wild }), { errors: "observation", robust: true });
+    const without = fit(sheltered, record({ N: values }), { errors: "observation" });
+    const off = (fitted: Fit): number => Math.abs(of(fitted, "K").value - of(without, "K").value);
+    expect(off(robust)).toBeLessThan(0.1 * off(plain));
+    const warning = robust.groups[0]!.warnings.find(({ code }) => code === "rows-count-less")!;
+    expect(warning.message).toMatch(
+      /^Far off the rule, and so counted for less than half: row 7 \(weight 0\.\d\d\)\. Look/,
+    );
+  });
+
+  test("gives a mean by Huber's weights", () => {
+    // Source: the equation sum psi((x - m)/s) = 0 with psi(u) = max(-1.345, min(1.345, u)), solved here by bisection.
+    const x = [3.1, 2.9, 3.3, 3.0, 2.8, 3.2, 9.9];
+    const mean = of(
+      fit(recurrence("D[t+1] = D"), record({ D: x }), { errors: "observation", robust: true }),
+      "D[0]",
+    ).value;
+    const sizes = x.map((value) => Math.abs(value - mean)).sort((a, b) => a - b);
+    const scale = sizes[3]! / 0.6744897501960817;
+    const pull = x.reduce((sum, value) => sum + Math.max(-1.345, Math.min(1.345, (value - mean) / scale)), 0);
+    expect(Math.abs(pull)).toBeLessThan(1e-6);
+  });
+});
+
+test("a symmetric interval is left out where the profile is lopsided", () => {
+  const lopsided = fit(sheltered, record({ N: values.slice(0, 9) }), { errors: "observation" });
+  const { profile, wald, value } = of(lopsided, "K");
+  const ratio = (profile.upper! - value) / (value - profile.lower!);
+  expect(wald === undefined).toBe(ratio > 1.5);
+});
+
+test("a fit that sits where the rule bends says so", () => {
+  // The level falls to the floor c and stays: the best c is the floor itself, on the bend of max.
+  const x = [10, 8, 6.4, 5.12, 5, 5, 5, 5, 5.01, 4.99];
+  const bent = fit(recurrence("x[t+1] = max(0.8*x, c)"), record({ x }), { errors: "observation" });
+  const { stop, warnings } = bent.groups[0]!;
+  const smooth = stop.kind === "converged" && stop.test === "gradient";
+  expect(warnings.some(({ code }) => code === "on-a-bend")).toBe(!smooth);
+});
