@@ -47,7 +47,7 @@ export interface Sensitivity {
  * elasticity (central differences of a ten-thousandth).
  *
  * @throws {ModelError} `no-such-setting` | `outside-projection` | `unknown-name` | `risk-not-smooth`.
- * @example sensitivity(fitted, { periods: 12, answer: { time: "N", value: 600, direction: "rising" } }).rows[0].name // "N[0]"
+ * @example sensitivity(fitted, { periods: 12, answer: { time: "N", value: 600, direction: "rising" } }).rows.length // 3
  */
 export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): Sensitivity {
   if (isRisk(options.answer)) throw refuseRiskObjective();

@@ -187,6 +187,7 @@ function endOutside(
   first: number,
   last: number,
 ): void {
+  if (isOpen(limits) && allFinite(present, first * width, last * width)) return;
   for (let s = 0; s < states; s++) {
     const low = limits[2 * s]!;
     const high = limits[2 * s + 1]!;
@@ -195,6 +196,18 @@ function endOutside(
       if (!(value >= low && value <= high)) present.fill(Number.NaN, at - s, at - s + width);
     }
   }
+}
+
+function isOpen(limits: Float64Array): boolean {
+  for (let i = 0; i < limits.length; i++) if (Math.abs(limits[i]!) < Number.MAX_VALUE) return false;
+  return true;
+}
+
+/** One sum of differences that are 0 for numbers and NaN for all else: no branch a value. */
+function allFinite(values: Float64Array, from: number, to: number): boolean {
+  let zero = 0;
+  for (let at = from; at < to; at++) zero += values[at]! - values[at]!;
+  return zero === 0;
 }
 
 function report(

@@ -110,14 +110,6 @@ export function refuseNoise(state: string, why: string): ModelError {
   });
 }
 
-export function refuseKept(paths: number, periods: number): ModelError {
-  return new ModelError(
-    "too-many-paths",
-    `${paths} paths of ${periods} periods are too many to keep. Ask for fewer, or name what is to be watched: watch: [{ state, value, direction }].`,
-    { paths, periods },
-  );
-}
-
 export function refuseWatch(state: string, states: readonly string[]): ModelError {
   return new ModelError(
     "unknown-state",
