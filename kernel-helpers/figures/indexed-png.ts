@@ -18,9 +18,19 @@ const colours = 256;
 export function indexedPng({ width, height, bytes }: Pixels): Uint8Array {
   const { palette, places } = paletteOf(bytes);
   const rows = new Uint8Array((width + 1) * height);
-  for (let y = 0, pixel = 0; y < height; y++) {
+  // Neighbours are mostly alike: a colour is looked up only where it changes.
+  let last = -1;
+  let place = 0;
+  for (let y = 0, at = 0; y < height; y++) {
     const row = y * (width + 1) + 1;
-    for (let x = 0; x < width; x++, pixel++) rows[row + x] = places.get(colourAt(bytes, 4 * pixel)) as number;
+    for (let x = 0; x < width; x++, at += 4) {
+      const colour = colourAt(bytes, at);
+      if (colour !== last) {
+        last = colour;
+        place = places.get(colour) as number;
+      }
+      rows[row + x] = place;
+    }
   }
   const head = Buffer.alloc(13);
   head.writeUInt32BE(width, 0);
@@ -54,10 +64,17 @@ function colourAt(bytes: Uint8Array, at: number): number {
 /** The commonest colours, and the place in them of every colour that occurs. */
 function paletteOf(bytes: Uint8Array): { palette: number[]; places: Map<number, number> } {
   const counts = new Map<number, number>();
-  for (let at = 0; at < bytes.length; at += 4) {
+  let last = -1;
+  let run = 0;
+  for (let at = 0; at < bytes.length; at += 4, run++) {
     const colour = colourAt(bytes, at);
-    counts.set(colour, (counts.get(colour) ?? 0) + 1);
+    if (colour === last) continue;
+    counts.set(last, (counts.get(last) ?? 0) + run);
+    last = colour;
+    run = 0;
   }
+  counts.set(last, (counts.get(last) ?? 0) + run);
+  counts.delete(-1);
   // Ties are broken by the colour itself, so that the same drawing gives the same bytes.
   const common = [...counts].sort((a, b) => b[1] - a[1] || a[0] - b[0]).map(([colour]) => colour);
   const palette = common.slice(0, colours);
