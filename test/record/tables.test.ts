@@ -128,6 +128,26 @@ describe("filling", () => {
     ]);
   });
 
+  test("names missing month ends as month ends, and missing half hours by their time", () => {
+    const owed = tableOf({ date: ["2026-01-31", "2026-04-30"], owed: [300, 210] });
+    const made = filled(owed, { period: "date", step: "month-end", column: "owed", with: "between" });
+    expect(made.columns).toEqual([
+      ["2026-01-31", "2026-02-28", "2026-03-31", "2026-04-30"],
+      Float64Array.from([300, 270, 240, 210]),
+      [false, true, true, false],
+    ]);
+    const read = tableOf({ at: ["2026-01-31 23:30", "2026-02-01 00:30"], od: [1, 3] });
+    expect(
+      Array.from(
+        filled(read, { period: "at", step: "half-hour", column: "od", with: "previous" }).columns[0]!,
+      ),
+    ).toEqual(["2026-01-31 23:30", "2026-02-01 00:00", "2026-02-01 00:30"]);
+    const weekly = tableOf({ year: [2020, 2021], week: [52, 1], sold: [1, 2] });
+    expect(() =>
+      filled(weekly, { period: ["year", "week"], step: "iso-week", column: "sold", with: 0 }),
+    ).toThrow("so that the missing periods can be named");
+  });
+
   test("needs a rule that is stated", () => {
     expect(() => filled(gapped, { ...weeks, column: "sold", with: "nearest" as never })).toThrow(
       '"previous", "between" or a number',

@@ -79,3 +79,21 @@ export function monthNumber(moment: Moment): number {
 export function isMonthEnd(moment: Moment): boolean {
   return new Date(moment + dayLength).getUTCDate() === 1;
 }
+
+/**
+ * The same day some months later, or the last of that month where it has no such day; the last day of a month
+ * stays a last day, so that 31 January, 28 February and 31 March follow each other.
+ */
+export function monthsLater(moment: Moment, months: number): Moment {
+  const at = new Date(moment);
+  const [year, month] = [at.getUTCFullYear(), at.getUTCMonth() + months];
+  const lastDay = new Date(Date.UTC(year, month + 1, 0)).getUTCDate();
+  const day = isMonthEnd(moment) ? lastDay : Math.min(at.getUTCDate(), lastDay);
+  return Date.UTC(year, month, day) + (((moment % dayLength) + dayLength) % dayLength);
+}
+
+/** A moment as a date, or as a date and time: 2026-03-31, 2026-03-31 14:30. */
+export function momentText(moment: Moment, withTime: boolean): string {
+  const text = new Date(moment).toISOString();
+  return withTime ? text.slice(0, 16).replace("T", " ") : text.slice(0, 10);
+}

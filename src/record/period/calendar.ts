@@ -1,5 +1,5 @@
 import type { StepLength } from "../observations.js";
-import { dayLength, type Moment, mondayBefore, mondayOf, monthNumber } from "./calendar-date.js";
+import { dayLength, type Moment, mondayBefore, mondayOf, monthNumber, monthsLater } from "./calendar-date.js";
 
 /** A way of counting periods: by name, or a number of units of time. */
 export type CalendarName =
@@ -22,6 +22,8 @@ export interface Calendar {
   readonly step: StepLength;
   /** Number of the period that a date lies in; not whole when dates may lie off the step. */
   readonly ofDate: ((moment: Moment) => number) | undefined;
+  /** The moment some steps after another; the last day of a month stays a last day. */
+  readonly after: ((moment: Moment, steps: number) => Moment) | undefined;
   /** Number of the period named by a year and a number within it, or undefined when there is none. */
   readonly ofYearAndNumber: ((year: number, number: number) => number | undefined) | undefined;
 }
@@ -60,8 +62,18 @@ export function everyUnit(step: StepLength, name?: CalendarName): Calendar {
         : months !== undefined
           ? (moment) => Math.floor(monthNumber(moment) / months) / step.every
           : undefined,
+    after: afterSteps(length, months, step.every),
     ofYearAndNumber: months === undefined ? undefined : numbered(12 / months, step.every),
   };
+}
+
+function afterSteps(
+  length: number | undefined,
+  months: number | undefined,
+  every: number,
+): Calendar["after"] {
+  if (length !== undefined) return (moment, steps) => moment + steps * every * length;
+  return months === undefined ? undefined : (moment, steps) => monthsLater(moment, steps * every * months);
 }
 
 function numbered(inAYear: number, every: number): Calendar["ofYearAndNumber"] {
@@ -73,6 +85,7 @@ const isoWeeks: Calendar = {
   name: "iso-week",
   step: { every: 1, of: "week" },
   ofDate: (moment) => mondayBefore(moment) / (7 * dayLength),
+  after: (moment, steps) => moment + steps * 7 * dayLength,
   ofYearAndNumber: (year, week) => {
     const monday = mondayOf(year, week);
     return monday === undefined ? undefined : monday / (7 * dayLength);
@@ -84,6 +97,7 @@ const fourFourFive: Calendar = {
   name: "4-4-5",
   step: { every: 1, of: "period" },
   ofDate: undefined,
+  after: undefined,
   ofYearAndNumber: numbered(12, 1),
 };
 

@@ -1,5 +1,7 @@
 import { type Column, type ColumnTable, columnNamed, isEmpty } from "../column-table.js";
 import { numberColumn } from "../number-column.js";
+import { momentText } from "../period/calendar-date.js";
+import type { PeriodAxis } from "../period/period-axis.js";
 import { optionWrong } from "../refusals.js";
 import { packed } from "../table-of-rows.js";
 import { type PeriodsOf, type PlacedTable, placed } from "./placed-series.js";
@@ -20,7 +22,7 @@ export interface FillOptions extends PeriodsOf {
  * Cells before the first and after the last recorded value are never filled by "previous" or "between" beyond
  * what these say. Other columns are empty in the new rows, except those that tell series and periods apart.
  *
- * @throws {ModelError} `option-wrong` (a pair of period columns, or dates, name no missing period) |
+ * @throws {ModelError} `option-wrong` (a pair of period columns names no missing period) |
  *   `missing-column` | `not-a-number`, and those of the period column.
  */
 export function filled(record: ColumnTable, options: FillOptions): ColumnTable {
@@ -28,12 +30,6 @@ export function filled(record: ColumnTable, options: FillOptions): ColumnTable {
   if (rule !== "previous" && rule !== "between" && typeof rule !== "number")
     throw optionWrong("with", rule, '"previous", "between" or a number');
   const place = placed(record, options);
-  if (place.axis.isDated)
-    throw optionWrong(
-      "period",
-      options.period,
-      "a column of numbers, so that the missing periods can be named",
-    );
   const { values } = numberColumn(
     columnNamed(place.table, options.column, "the column to fill"),
     options.column,
@@ -88,17 +84,31 @@ function fill(rule: FillRule, step: number, before: Known, after: Known): number
   return before[1] + ((after![1] - before[1]) * (step - before[0])) / (after![0] - before[0]);
 }
 
+/** How a period without a row is written: as a number, or as the date that many steps after the first. */
+function missingPeriod(axis: PeriodAxis): (first: number, step: number) => unknown {
+  const { calendar, moments, written } = axis;
+  if (!axis.isDated) return (first, step) => axis.time[first]! + step * calendar.step.every;
+  const { after } = calendar;
+  if (moments === undefined || after === undefined || !/^\d{4}-\d{2}-\d{2}/.test(written(0)))
+    throw optionWrong(
+      "period",
+      axis.column,
+      "a column of numbers or of dates such as 2026-03-31, so that the missing periods can be named",
+    );
+  return (first, step) => momentText(after(moments[first]!, step), written(first).includes(":"));
+}
+
 function assembled(
   { table, axis, by }: PlacedTable,
   column: string,
   rows: readonly PeriodRow[],
   cells: readonly FilledCell[],
 ): ColumnTable {
-  const every = axis.calendar.step.every;
+  const periodAt = missingPeriod(axis);
   const cellOf = (name: string, source: Column, at: PeriodRow, i: number): unknown => {
     if (name === column) return cells[i]!.value;
     if ("row" in at) return source[at.row];
-    if (name === axis.column) return axis.time[at.first]! + at.step * every;
+    if (name === axis.column) return periodAt(at.first, at.step);
     return by.includes(name) ? source[at.first] : null;
   };
   const columns = table.columns.map((source, c) =>
