@@ -1,5 +1,5 @@
-import { createRequire } from "node:module";
 import { join } from "node:path";
+import { runKernel, warmUp } from "../kernel/index.js";
 import type { Arguments } from "./arguments.js";
 
 /** Runs a command and tells the exit status. What a command needs is loaded when it runs: the kernel starts fast. */
@@ -17,10 +17,6 @@ periodwise start [notebook...]           the same, for every notebook of this ch
 export const commands: Readonly<Record<string, Command>> = {
   kernel: async ({ words: [connectionFile] }) => {
     if (connectionFile === undefined) throw missing("connection file", "periodwise kernel <connection file>");
-    // Node's loader for import() takes longer to start than this one.
-    const { runKernel } = createRequire(__filename)(
-      "../kernel/index.js",
-    ) as typeof import("../kernel/index.js");
     runKernel(connectionFile, async () => {
       const [{ ruleText }, { tradeTerms }] = await Promise.all([
         import("./rule-text.js"),
@@ -46,7 +42,6 @@ export const commands: Readonly<Record<string, Command>> = {
     const data = dataFolder(options["prefix"], process.env, process.platform);
     const folder = installSpecification(data, [process.execPath, program, "kernel"]);
     console.log(`Installed the kernel specification in ${folder}.`);
-    const { warmUp } = await import("../kernel/index.js");
     warmUp(process.cwd());
     return 0;
   },
