@@ -11,6 +11,7 @@ export type { GroupFit } from "./group-fit.js";
 export type { Interval } from "./interval.js";
 export { normalEquations } from "./normal-equations.js";
 export { type Prepared, prepared } from "./prepared.js";
+export { type Resampler, resampler } from "./resampler.js";
 export { type SecondOpinion, secondOpinion } from "./second-opinion.js";
 export { type Unknowns, unknownsOf } from "./unknowns.js";
 export { type EstimateRow, estimates, points, type SummaryRow, summary } from "./views.js";

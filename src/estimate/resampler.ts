@@ -17,6 +17,11 @@ export type ResampledErrors = "parametric" | "residual" | "block";
 export interface Resampler {
   /** One record drawn and fitted. */
   readonly refit: (stream: RandomStream) => Pick<Lowest, "estimates" | "stop">;
+  /**
+   * Whether the interval that the record drawn last would give unknown i holds the value it was drawn with; for fits by
+   * likelihood. One refit with the unknown held there tells: the profile holds what lies under its cut.
+   */
+  readonly holdsTruth?: (found: Float64Array, i: number) => boolean;
   /** An unknown as it is reported. */
   readonly reported: (i: number, value: number) => number;
 }
@@ -46,6 +51,15 @@ export function resampler(
     refit(stream) {
       space.rows.take(make(stream));
       return objective.minimise(at, unknowns.lower, unknowns.upper);
+    },
+    holdsTruth(found, i) {
+      const lower = unknowns.lower.slice();
+      const upper = unknowns.upper.slice();
+      const from = found.slice();
+      lower[i] = at[i]!;
+      upper[i] = at[i]!;
+      from[i] = at[i]!;
+      return objective.minimise(from, lower, upper).value - objective.value(found) <= fitted.cut;
     },
   };
 }

@@ -2,6 +2,7 @@ import { describe, expect, test } from "vitest";
 import { fit } from "../../src/estimate/index.js";
 import { check } from "../../src/evidence/index.js";
 import { randomStream } from "../../src/numeric/index.js";
+import { observations, tableOf } from "../../src/record/index.js";
 import { recurrence } from "../../src/rule/index.js";
 import { culture } from "./culture.js";
 import { drawn } from "./drawn.js";
@@ -71,5 +72,49 @@ describe("advice on the kind of error", () => {
       expect(found.filter((kind) => kind === errors).length).toBeGreaterThanOrEqual(30);
       expect(found.filter((kind) => kind !== errors && kind !== "undecided").length).toBeLessThanOrEqual(4);
     }
+  });
+});
+
+describe("fits that are not of least squares", () => {
+  test("both kinds of error at once are tried on drawn records too", () => {
+    const values = drawn(sheltered, [1.4, 100], 8, 40, 0.08, "process", randomStream(8));
+    const checked = check(fit(sheltered, series(values), { errors: "both", spread: "proportional" }), {
+      refits: 50,
+    });
+    const { refits, unknowns } = checked.groups[0]!.recovery!;
+    expect(refits).toBe(50);
+    expect(unknowns.map(({ name }) => name)).toEqual(["R", "K", "process error", "observation error"]);
+    for (const { coverage } of unknowns) expect(coverage).toBeGreaterThan(0.7);
+  });
+
+  test("counts are checked by their residuals, and it is said that intervals were not tried", () => {
+    const values = drawn(sheltered, [1.4, 100], 8, 30, 0.05, "observation", randomStream(3)).map(Math.round);
+    const checked = check(fit(sheltered, series(values), { errors: "observation", spread: "poisson" }));
+    expect(checked.groups[0]!.recovery).toBeUndefined();
+    expect(checked.sentence).toContain("its intervals were not tried on drawn records");
+  });
+});
+
+describe("lack of fit against replicates", () => {
+  // Source: one-way analysis of variance by SciPy 1.17 (stats.f_oneway and a line by stats.linregress) on the rows below.
+  test("F is the misfit of means over the scatter within replicates", () => {
+    const rows = [0, 1, 2, 3, 4, 5].flatMap((t) => [-0.3, 0.1, 0.2].map((e, i) => ({ t, e, i })));
+    const level = (t: number): number => 10 + 2 * t + (t % 2 === 0 ? 0.4 : -0.4);
+    const table = tableOf({
+      t: rows.map(({ t }) => t),
+      well: rows.map(({ i }) => i),
+      N: rows.map(({ t, e }) => level(t) + e),
+    });
+    const record = observations(table, {
+      period: "t",
+      step: { every: 1, of: "hour" },
+      value: "N",
+      replicates: "well",
+    });
+    const fitted = fit(recurrence("N[t+1] = N + c"), record, { errors: "observation" });
+    const [found] = check(fitted).groups[0]!.lackOfFit;
+    expect(found!.degreesOfFreedom).toEqual([4, 12]);
+    expect(Math.abs(found!.ratio / 9.40408163265304 - 1)).toBeLessThan(1e-8);
+    expect(found!.sentence).toMatch(/^The rule misses the readings by more than replicates differ/);
   });
 });

@@ -22,7 +22,7 @@ export interface GroupCheck {
   readonly tests: readonly ResidualTest[];
   readonly windows: readonly Window[];
   readonly lackOfFit: readonly LackOfFit[];
-  /** Undefined where the fit is not one of least squares. */
+  /** Undefined for fits to counts, censored values and groups together. */
   readonly recovery: Recovery | undefined;
   /** Undefined where the other kind of error could not be fitted. */
   readonly errors: ErrorAdvice | undefined;

@@ -74,7 +74,8 @@ interface Side {
 
 /** The fit of one kind, taken over where it is the one given. */
 function sideOf(given: Fit, group: GroupFit, errors: Single): Side | undefined {
-  const fit = given.options.errors === errors ? given : otherFit(given, group, errors);
+  const alone = given.groups.length === 1 || (given.options.groups ?? "separate") === "separate";
+  const fit = alone && given.options.errors === errors ? given : otherFit(given, group, errors);
   const own = fit?.groups.find((each) => each.group === group.group);
   if (fit === undefined || own === undefined || !(own.sigma > 0)) return undefined;
   const again = refitter(fit, own);

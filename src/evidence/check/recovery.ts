@@ -1,5 +1,5 @@
-import type { Fit, GroupFit } from "../../estimate/index.js";
-import { type Minimum, quantile, type RandomStream } from "../../numeric/index.js";
+import { type Fit, type GroupFit, resampler } from "../../estimate/index.js";
+import { quantile, type RandomStream } from "../../numeric/index.js";
 import { recordDrawer } from "../refit/record-drawer.js";
 import { refitter } from "../refit/refitter.js";
 
@@ -28,6 +28,12 @@ export interface Recovery {
   readonly unknowns: readonly RecoveredUnknown[];
 }
 
+/** One record drawn and fitted: its estimates, and whether each one's interval holds the truth. */
+interface Refit {
+  readonly estimates: readonly number[];
+  readonly holds: readonly boolean[];
+}
+
 /**
  * Draws records from the fitted rule, fits each again, and tells bias and coverage of every unknown.
  *
@@ -35,7 +41,7 @@ export interface Recovery {
  * when the profile interval holds it.
  *
  * @param wanted - records to refit.
- * @returns undefined where the fit is not one of least squares.
+ * @returns undefined where the fit is neither one of least squares nor of both kinds of error.
  */
 export function recovery(
   fit: Fit,
@@ -43,33 +49,58 @@ export function recovery(
   wanted: number,
   stream: RandomStream,
 ): Recovery | undefined {
+  const attempt = squaresAttempt(fit, group) ?? likelihoodAttempt(fit, group);
+  if (attempt === undefined) return undefined;
+  const found: Refit[] = [];
+  let failed = 0;
+  while (found.length < wanted && failed < wanted) {
+    const refit = attempt(stream);
+    if (refit === undefined) failed++;
+    else found.push(refit);
+  }
+  const unknowns = group.estimates.map(({ name, value }, i) => {
+    const held = found.filter(({ holds }) => holds[i]).length / found.length;
+    return recovered(
+      name,
+      value,
+      Float64Array.from(found, ({ estimates }) => estimates[i]!),
+      held,
+    );
+  });
+  return { refits: found.length, failed, level: fit.options.level ?? 0.95, unknowns };
+}
+
+type Attempt = (stream: RandomStream) => Refit | undefined;
+
+function squaresAttempt(fit: Fit, group: GroupFit): Attempt | undefined {
   const again = refitter(fit, group);
   if (again === undefined) return undefined;
   const { at } = again;
   const draw = recordDrawer(fit, again, group.sigma);
-  const found = Array.from(at, () => [] as number[]);
-  const covered = new Int32Array(at.length);
   const values = new Float64Array(again.recorded.length);
   const free = fit.options.cut === "chi-square" ? 0 : at.length;
-  let failed = 0;
-  const note = (best: Minimum): void => {
-    const most = best.sumOfSquares * (1 + group.cut / (again.rows.count - free));
-    for (let i = 0; i < at.length; i++) {
-      found[i]!.push(best.estimates[i]!);
-      const held = again.minimiseHeld(best.estimates, i, at[i]!).sumOfSquares;
-      covered[i] = covered[i]! + (held <= most ? 1 : 0);
-    }
+  return (stream) => {
+    if (!draw(stream, values)) return undefined;
+    const { estimates, stop, sumOfSquares } = again.minimise(at);
+    if (stop.kind === "failed") return undefined;
+    const most = sumOfSquares * (1 + group.cut / (again.rows.count - free));
+    const held = (i: number): number => again.minimiseHeld(estimates, i, at[i]!).sumOfSquares;
+    return { estimates: Array.from(estimates), holds: Array.from(at, (_, i) => held(i) <= most) };
   };
-  while (found[0]!.length < wanted && failed < wanted) {
-    const best = draw(stream, values) ? again.minimise(at) : undefined;
-    if (best === undefined || best.stop.kind === "failed") failed++;
-    else note(best);
-  }
-  const refits = found[0]!.length;
-  const unknowns = group.estimates.map(({ name }, i) =>
-    recovered(name, at[i]!, Float64Array.from(found[i]!), covered[i]! / refits),
-  );
-  return { refits, failed, level: fit.options.level ?? 0.95, unknowns };
+}
+
+/** Fits of both kinds of error are drawn and searched by `estimate` itself. */
+function likelihoodAttempt(fit: Fit, group: GroupFit): Attempt | undefined {
+  if (group.filter === undefined) return undefined;
+  const { refit, reported, holdsTruth } = resampler(fit, group, "parametric", undefined);
+  return (stream) => {
+    const { estimates, stop } = refit(stream);
+    if (stop.kind === "failed" || holdsTruth === undefined) return undefined;
+    return {
+      estimates: Array.from(estimates, (value, i) => reported(i, value)),
+      holds: Array.from(estimates, (_, i) => holdsTruth(estimates, i)),
+    };
+  };
 }
 
 function recovered(name: string, truth: number, found: Float64Array, coverage: number): RecoveredUnknown {

@@ -78,7 +78,7 @@ function endConcerns(group: GroupFit, windows: readonly Window[]): string[] {
 
 function heldText(recovery: Found["recovery"]): string {
   if (recovery === undefined)
-    return "its intervals were not tried on drawn records, which only least squares allows";
+    return "its intervals were not tried on drawn records, which counts, censored values and groups fitted together do not allow";
   if (recovery.refits === 0) return "no record could be drawn from it";
   const level = Math.round(100 * recovery.level);
   const fewest = Math.min(...recovery.unknowns.map((unknown) => unknown.coverage));
@@ -111,9 +111,9 @@ const isBiased = (unknown: RecoveredUnknown): boolean =>
   Math.abs(unknown.medianBias) > biased * unknown.deviation;
 
 function errorConcerns(fit: Fit, { errors }: Found): string[] {
-  return errors === undefined || errors.kind === "undecided" || errors.kind === fit.options.errors
-    ? []
-    : [errors.sentence];
+  const given = fit.options.errors;
+  const agrees = errors === undefined || errors.kind === "undecided" || errors.kind === given;
+  return agrees || given === "both" ? [] : [errors.sentence];
 }
 
 const percent = (share: number): string => `${(100 * share).toFixed(0)}%`;

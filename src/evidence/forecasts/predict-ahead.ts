@@ -24,8 +24,8 @@ export function predictAhead(
   periods: number,
 ): readonly (readonly Prediction[])[] | undefined {
   const { rule, options } = fit;
-  if (options.errors === "both" || options.factor !== undefined || typeof options.spread === "object")
-    return undefined;
+  const plain = [undefined, "constant", "proportional"].includes(options.spread as string | undefined);
+  if (options.errors === "both" || options.factor !== undefined || !plain) return undefined;
   const trained = fit.observations.groups.find((each) => each.name === group.group)!;
   const last = trained.index[trained.index.length - 1]!;
   const unknowns = unknownsOf(rule, options);

@@ -27,15 +27,20 @@ export interface Refitter {
 }
 
 /**
- * Makes a group's fit ready to be done again; undefined where the fit is not one of least squares (counts, both kinds
- * of error at once).
+ * Makes a group's fit ready to be done again; undefined where the fit is not one of least squares (counts, censored values,
+ * both kinds of error at once, groups fitted together).
  */
 export function refitter(fit: Fit, group: GroupFit): Refitter | undefined {
   const { rule, options } = fit;
   const { spread } = options;
   const counted = spread === "poisson" || spread === "negative-binomial";
   const recordedGroup = fit.observations.groups.find((each) => each.name === group.group);
-  if (options.errors === "both" || counted || recordedGroup === undefined) return undefined;
+  const censored = Object.values(recordedGroup?.censoring ?? {}).some((marks) =>
+    marks.some((mark) => mark !== 0),
+  );
+  const together = (options.groups ?? "separate") !== "separate" && fit.groups.length > 1;
+  if (options.errors === "both" || counted || censored || together || recordedGroup === undefined)
+    return undefined;
   const unknowns = unknownsOf(rule, options);
   const { rows, system } = prepared(rule, recordedGroup, unknowns, options);
   const { lower, upper } = unknowns;
