@@ -28,7 +28,7 @@ function errorSentence({ errors }: FitOptions): string {
     : "Error in both the process and the observation: likelihood of the readings by the Kalman filter.";
 }
 
-function filterSentence({ method, start }: NonNullable<GroupFit["filter"]>): string {
+function filterSentence({ method, start, check }: NonNullable<GroupFit["filter"]>): string {
   const filter =
     method === "exact"
       ? "The filter is exact, the rule being linear on the fitting scale"
@@ -37,7 +37,11 @@ function filterSentence({ method, start }: NonNullable<GroupFit["filter"]>): str
     start === "stationary"
       ? "the first reading is taken from the rule's long-run distribution (stationary start)"
       : "the first reading is taken as read and left out of the likelihood (diffuse start)";
-  return `${filter}; ${first}.`;
+  const checked =
+    check === undefined
+      ? ""
+      : ` Log-likelihood ${check.filter.toFixed(2)}, by particles ${check.particles.toFixed(2)} (sd ${check.deviation.toFixed(2)}).`;
+  return `${filter}; ${first}.${checked}`;
 }
 
 function spreadSentence({ spread = "constant" }: FitOptions): string {

@@ -7,6 +7,8 @@ export interface Filtered {
   readonly start: "stationary" | "diffuse";
   /** Exact where the rule is linear on the fitting scale; otherwise the rule's slope is taken at the estimated state. */
   readonly method: "exact" | "extended";
+  /** Of an extended filter: its log-likelihood, the mean and standard deviation of those by particles. */
+  readonly check?: { readonly filter: number; readonly particles: number; readonly deviation: number };
   /** State vector at the last recorded period, on the fitting scale: mean [slots] and covariance [slots, slots]. */
   readonly last: { readonly mean: readonly number[]; readonly covariance: readonly number[] };
 }

@@ -21,7 +21,12 @@ export function refitProblem(fit: Fit, fitted: GroupFit): RefitProblem {
   const { rule, options } = fit;
   const unknowns = unknownsOf(rule, options);
   const own = (options.groups ?? "separate") === "separate";
-  if (!own || unknowns.names.length !== fitted.estimates.length || !bySquares(options))
+  if (
+    !own ||
+    unknowns.names.length !== fitted.estimates.length ||
+    !bySquares(options) ||
+    options.robust === true
+  )
     throw refuseResampling();
   const group = fit.observations.groups.find((each) => each.name === fitted.group)!;
   const at = Float64Array.from(fitted.estimates, ({ value }) => value);

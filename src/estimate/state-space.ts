@@ -5,6 +5,7 @@ import type { FitRows } from "./fit-rows.js";
 import { inputsByPeriod } from "./inputs-by-period.js";
 import { type Belief, type Dynamics, predict, scratch, takeIn } from "./kalman-step.js";
 import { type LinearRule, linearFilter, longRun } from "./linear-filter.js";
+import type { ParticleModel } from "./particle-filter.js";
 import { predictionRows } from "./prediction-rows.js";
 import { type Readings, readingsOf } from "./readings.js";
 import { slotsOf } from "./slots.js";
@@ -18,6 +19,8 @@ export interface StateSpace {
   readonly rows: FitRows;
   /** The belief after the last reading of the last evaluation. */
   readonly belief: Belief;
+  /** What particles need at the unknowns given. */
+  readonly particleModel: (at: Float64Array) => ParticleModel;
   /** Standard deviation of a reading in the long run; NaN where there is none. */
   readonly longRunSd: (at: Float64Array) => number;
 }
@@ -86,6 +89,11 @@ export function stateSpace(
     minusTwice(at) {
       const sum = run(at);
       return Number.isFinite(sum) ? -2 * sum : Number.POSITIVE_INFINITY;
+    },
+    particleModel(at) {
+      setDown(at);
+      const sds = rule.states.map((_, s) => Math.sqrt(readingVariance(s)));
+      return { rule, dynamics, constants, readings, processSd: variance.map(Math.sqrt), readingSd: sds };
     },
     longRunSd(at) {
       setDown(at);

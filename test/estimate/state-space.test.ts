@@ -56,6 +56,19 @@ describe("errors in both the process and the observation", () => {
     expect(of(fitted, "R").profile.upper!).toBeGreaterThan(1.5);
   });
 
+  test("particles agree with the exact filter where the rule is linear, within their own scatter", () => {
+    // The same linear rule, written so that it reads the period and is filtered by its slope: that filter is exact too.
+    const rule = recurrence("x[t+1] = c + b*x + 0*t");
+    const stream = randomStream(10);
+    const x = [3];
+    for (let t = 1; t < 30; t++) x.push(1 + 0.6 * x[t - 1]! + 0.5 * stream.normal());
+    const read = x.map((value) => value + 0.4 * stream.normal());
+    const { filter, warnings } = fit(rule, record({ x: read }), { errors: "both" }).groups[0]!;
+    const { check } = filter!;
+    expect(Math.abs(check!.particles - check!.filter)).toBeLessThan(4 * check!.deviation + 0.1);
+    expect(warnings.map(({ code }) => code)).not.toContain("filter-rough");
+  });
+
   test("a known error of reading narrows the rest", () => {
     const stream = randomStream(6);
     const x = Array.from({ length: 40 }, () => 0);
