@@ -9,7 +9,7 @@ import {
 import { columnsOf, noteFrame, notesOf, type RecordLike, toFrame } from "../dataframe/index.js";
 import { bundleOf, showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
-import { decisionsTable } from "./decisions-table.js";
+import { decisionSentence, decisionsTable } from "./decisions-table.js";
 
 /**
  * Corrects one cell of a record, or leaves a row out. The raw column stays as it was read; beside it stands a
@@ -23,7 +23,7 @@ import { decisionsTable } from "./decisions-table.js";
  */
 export function correct(record: RecordLike, correction: Correction): DataFrame {
   const corrected = correctTable(columnsOf(record), correction);
-  caseLog.noteStep(`correction: ${sentence(corrected.decisions!.at(-1)!)}`);
+  caseLog.noteStep(`correction: ${decisionSentence(corrected.decisions!.at(-1)!)}`);
   return sameSource(record, toFrame(corrected));
 }
 
@@ -37,7 +37,7 @@ export function undo(record: RecordLike, row?: number): DataFrame {
   const before = columnsOf(record);
   const after = undoLast(before, row);
   const taken = before.decisions!.find((decision) => !after.decisions?.includes(decision));
-  if (taken) caseLog.noteStep(`correction taken back: ${sentence(taken)}`);
+  if (taken) caseLog.noteStep(`correction taken back: ${decisionSentence(taken)}`);
   return sameSource(record, toFrame(after));
 }
 
@@ -57,14 +57,6 @@ export function decisionsLog(record: RecordLike): DecisionsLog {
   const { decisions = [] } = isObserved ? (record as Observations) : columnsOf(record as RecordLike);
   const made: DecisionsLog = { kind: "decisions", decisions };
   return showing(made, async () => (await bundleOf(decisionsTable(decisions))) ?? {});
-}
-
-function sentence({ row, column, was, now, why, who }: Decision): string {
-  const what =
-    column === ""
-      ? `row ${row} left out`
-      : `row ${row}, ${column}: was ${was ?? "nothing"}, now ${now ?? "nothing"}`;
-  return `${what}, because: ${why}${who === "" ? "" : ` (${who})`}`;
 }
 
 function sameSource(record: RecordLike, frame: DataFrame): DataFrame {

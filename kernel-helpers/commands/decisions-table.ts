@@ -22,3 +22,12 @@ export function decisionsTable(decisions: readonly Decision[]): Table {
     format: { group: "" },
   });
 }
+
+/** One decision as a line of the case's log. */
+export function decisionSentence({ row, column, was, now, why, who }: Decision): string {
+  const what =
+    column === ""
+      ? `row ${row} left out`
+      : `row ${row}, ${column}: was ${was ?? "nothing"}, now ${now ?? "nothing"}`;
+  return `${what}, because: ${why}${who === "" ? "" : ` (${who})`}`;
+}

@@ -1,5 +1,6 @@
 import type { DataFrame } from "danfojs-node";
 import {
+  type Decision,
   type DifferenceOptions,
   type Differences,
   differences as differencesOf,
@@ -19,6 +20,7 @@ import {
 } from "../dataframe/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { decisionSentence } from "./decisions-table.js";
 import { differencesBundle } from "./show-differences.js";
 import { observationsBundle } from "./show-observations.js";
 
@@ -71,7 +73,9 @@ export async function writeRecord(
  * const counts = observations(readings, { period: "hour", step: { every: 12, of: "hour" }, by: "flask", value: "density" });
  */
 export function observations(record: RecordLike, options: ObservationOptions): Observations {
-  const made = { ...observe(columnsOf(record), options) };
+  const table = columnsOf(record);
+  const made = { ...observe(table, options) };
+  noteObservations(made, table.decisions ?? []);
   return showing(made, () => observationsBundle(made));
 }
 
@@ -83,4 +87,17 @@ export function observations(record: RecordLike, options: ObservationOptions): O
 export function differences(record: Observations, options: DifferenceOptions = {}): Differences {
   const made = { ...differencesOf(record, options) };
   return showing(made, () => differencesBundle(made));
+}
+
+/** For the rerun block: how the record was read, and each choice of the options that changed a value. */
+function noteObservations(
+  { states, period, decisions = [] }: Observations,
+  known: readonly Decision[],
+): void {
+  const names = states.map(({ column }) => `"${column}"`).join(", ");
+  caseLog.noteStep(
+    `observations of ${names} by "${period.column}" in steps of ${period.calendar ?? `${period.step.every} ${period.step.of}`}`,
+  );
+  for (const decision of decisions)
+    if (!known.includes(decision)) caseLog.noteStep(`decision: ${decisionSentence(decision)}`);
 }

@@ -135,6 +135,49 @@ describe("frames out", () => {
   });
 });
 
+test("observations of several series with weights, limits and replicates come back from their frame", () => {
+  const rows = ["a", "b"].flatMap((item) =>
+    [1, 2, 4].flatMap((week) =>
+      [1, 2].map((well) => ({
+        item,
+        week,
+        well,
+        weight: 2,
+        stock: week * (item === "a" ? 3 : 5) + well,
+        out: week === 4,
+      })),
+    ),
+  );
+  const once = observations(rows, {
+    ...options,
+    by: "item",
+    replicates: "well",
+    weight: "weight",
+    censored: { above: "out" },
+  });
+  const made = frame(once);
+  expect(made.columns).toEqual([
+    "series",
+    "row",
+    "step",
+    "week",
+    "stock",
+    "weight",
+    "stock censored",
+    "stock replicates",
+    "stock deviation",
+  ]);
+  const again = observations(made, {
+    ...options,
+    by: "series",
+    weight: "weight",
+    censored: { above: "stock censored" },
+  });
+  expect(again.groups.map(({ replicates: _, rows: __, ...group }) => group)).toEqual(
+    once.groups.map(({ replicates: _, rows: __, ...group }) => group),
+  );
+});
+
 test("any observations turned into a frame and back are the same observations", () => {
   const record = fc
     .array(

@@ -4,7 +4,7 @@ import { middle } from "./middle.js";
 const unusual = 8;
 const fewest = 7;
 /** What is usual is told from at most this many evenly spaced places of a long series. */
-const yardstick = 400;
+const yardstick = 120;
 
 /**
  * Places of values far above both neighbours or far below both, compared with how far values usually lie from
