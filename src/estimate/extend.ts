@@ -1,7 +1,7 @@
 import type { Observations, ObservedGroup } from "../record/index.js";
 import type { Fit } from "./fit.js";
 import { fit as fitRule } from "./fit.js";
-import { matchStates } from "./match-states.js";
+import { matchStates } from "./options/match-states.js";
 import { refuseNoNewRows, refuseOverlap, refuseUnknownName } from "./refusals.js";
 
 /** How one estimate changed when rows were added. */

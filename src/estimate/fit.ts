@@ -1,13 +1,13 @@
 import type { Warning } from "../numeric/index.js";
 import type { Observations } from "../record/index.js";
 import type { Rule } from "../rule/index.js";
-import { checkOptions } from "./check-options.js";
-import { conventionsOf } from "./conventions.js";
-import type { Estimate } from "./estimate-of.js";
-import { fitGroups } from "./fit-group.js";
-import type { FitOptions } from "./fit-options.js";
-import type { GroupFit } from "./group-fit.js";
-import { matchStates } from "./match-states.js";
+import { fitGroups } from "./fits/fit-group.js";
+import { checkOptions } from "./options/check-options.js";
+import { conventionsOf } from "./options/conventions.js";
+import type { FitOptions } from "./options/fit-options.js";
+import { matchStates } from "./options/match-states.js";
+import type { Estimate } from "./result/estimate-of.js";
+import type { GroupFit } from "./result/group-fit.js";
 
 /** A rule with its constants estimated from a record, each group on its own. */
 export interface Fit {

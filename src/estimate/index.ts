@@ -1,17 +1,22 @@
-export { type Bootstrap, type BootstrapOptions, type BootstrapRow, bootstrap } from "./bootstrap.js";
-export type { Criteria } from "./criteria.js";
-export type { Estimate } from "./estimate-of.js";
 export { type EstimateChange, type Extended, extend } from "./extend.js";
 export { type Fit, fit } from "./fit.js";
-export type { ErrorKind, FitOptions, Spread } from "./fit-options.js";
-export type { FitPoint } from "./fit-points.js";
-export type { FitRows } from "./fit-rows.js";
-export { type GridIntervalOptions, gridInterval } from "./grid-interval.js";
-export type { GroupFit } from "./group-fit.js";
-export type { Interval } from "./interval.js";
-export { normalEquations } from "./normal-equations.js";
-export { type Prepared, prepared } from "./prepared.js";
-export { type Resampler, resampler } from "./resampler.js";
+export { type GridIntervalOptions, gridInterval } from "./intervals/grid-interval.js";
+export type { Interval } from "./intervals/interval.js";
+export type { ErrorKind, FitOptions, Spread } from "./options/fit-options.js";
+export {
+  type Bootstrap,
+  type BootstrapOptions,
+  type BootstrapRow,
+  bootstrap,
+} from "./resampling/bootstrap.js";
+export { type Resampler, resampler } from "./resampling/resampler.js";
+export type { Criteria } from "./result/criteria.js";
+export type { Estimate } from "./result/estimate-of.js";
+export type { FitPoint } from "./result/fit-points.js";
+export type { GroupFit } from "./result/group-fit.js";
+export { type EstimateRow, estimates, points, type SummaryRow, summary } from "./result/views.js";
+export type { FitRows } from "./rows/fit-rows.js";
 export { type SecondOpinion, secondOpinion } from "./second-opinion.js";
-export { type Unknowns, unknownsOf } from "./unknowns.js";
-export { type EstimateRow, estimates, points, type SummaryRow, summary } from "./views.js";
+export { normalEquations } from "./systems/normal-equations.js";
+export { type Prepared, prepared } from "./systems/prepared.js";
+export { type Unknowns, unknownsOf } from "./unknowns/unknowns.js";

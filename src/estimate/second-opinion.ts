@@ -1,9 +1,9 @@
 import { levenbergMarquardt } from "ml-levenberg-marquardt";
 import type { Fit } from "./fit.js";
-import { bySquares } from "./fit-options.js";
-import type { GroupFit } from "./group-fit.js";
-import { prepared } from "./prepared.js";
-import { unknownsOf } from "./unknowns.js";
+import { bySquares } from "./options/fit-options.js";
+import type { GroupFit } from "./result/group-fit.js";
+import { prepared } from "./systems/prepared.js";
+import { unknownsOf } from "./unknowns/unknowns.js";
 
 /** What an independent solver says of a fit. */
 export interface SecondOpinion {

@@ -1,5 +1,16 @@
-export { choleskyFactor, choleskyInverse, choleskySolve } from "./cholesky.js";
-export { covarianceFromTriangle, type UnscaledCovariance } from "./covariance-from-triangle.js";
+export { choleskyFactor, choleskyInverse, choleskySolve } from "./algebra/cholesky.js";
+export { covarianceFromTriangle, type UnscaledCovariance } from "./algebra/covariance-from-triangle.js";
+export { rotateRowIn } from "./algebra/rotate-row-in.js";
+export {
+  type LeastSquaresProblem,
+  type LeastSquaresSolution,
+  leastSquares,
+} from "./least-squares/least-squares.js";
+export type { LinearisedSystem } from "./least-squares/linearised-system.js";
+export { type MinimiseOptions, type Minimum, minimiseSquares } from "./least-squares/minimise-squares.js";
+export { type SquaresWorkspace, squaresWorkspace } from "./least-squares/squares-workspace.js";
+export { ModelError } from "./model-error.js";
+export { editDistance, nearestNames } from "./nearest-names.js";
 export {
   chiSquareCdf,
   chiSquareQuantile,
@@ -10,19 +21,12 @@ export {
   normalQuantile,
   studentCdf,
   studentQuantile,
-} from "./distributions.js";
-export { findRoot, type RootOptions } from "./find-root.js";
-export { type LeastSquaresProblem, type LeastSquaresSolution, leastSquares } from "./least-squares.js";
-export type { LinearisedSystem } from "./linearised-system.js";
-export { logGamma } from "./log-gamma.js";
-export { type LowestValue, minimise } from "./minimise.js";
-export { type MinimiseOptions, type Minimum, minimiseSquares } from "./minimise-squares.js";
-export { ModelError } from "./model-error.js";
-export { editDistance, nearestNames } from "./nearest-names.js";
-export { quantile } from "./quantile.js";
-export { type RandomStream, randomStream } from "./random-stream.js";
-export { rotateRowIn } from "./rotate-row-in.js";
-export { secondDerivatives } from "./second-derivatives.js";
-export { type SquaresWorkspace, squaresWorkspace } from "./squares-workspace.js";
-export type { StopReason } from "./stop-reason.js";
+} from "./probability/distributions.js";
+export { logGamma } from "./probability/log-gamma.js";
+export { quantile } from "./probability/quantile.js";
+export { type RandomStream, randomStream } from "./probability/random-stream.js";
+export { findRoot, type RootOptions } from "./search/find-root.js";
+export { type LowestValue, minimise } from "./search/minimise.js";
+export { secondDerivatives } from "./search/second-derivatives.js";
+export type { StopReason } from "./search/stop-reason.js";
 export type { Warning } from "./warning.js";

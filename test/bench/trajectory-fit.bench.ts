@@ -2,8 +2,8 @@
 import { readFileSync } from "node:fs";
 import { join } from "node:path";
 import { bench } from "vitest";
-import { trajectorySystem } from "../../src/estimate/trajectory-system.js";
-import { unknownsOf } from "../../src/estimate/unknowns.js";
+import { trajectorySystem } from "../../src/estimate/systems/trajectory-system.js";
+import { unknownsOf } from "../../src/estimate/unknowns/unknowns.js";
 import { minimiseSquares, randomStream, squaresWorkspace } from "../../src/numeric/index.js";
 import { compileRule, recurrence } from "../../src/rule/index.js";
 import { compiledInC, leastMicroseconds } from "./time-in-c.js";

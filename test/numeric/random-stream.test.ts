@@ -1,6 +1,6 @@
 import { expect, test } from "vitest";
 import { normalCdf, randomStream } from "../../src/numeric/index.js";
-import { advance, jumpedState, seededState } from "../../src/numeric/xoshiro.js";
+import { advance, jumpedState, seededState } from "../../src/numeric/probability/xoshiro.js";
 
 function word(high: number, low: number): bigint {
   return (BigInt(high >>> 0) << 32n) | BigInt(low >>> 0);

@@ -1,0 +1,109 @@
+import type { ObservedGroup } from "../../record/index.js";
+import type { Rule } from "../../rule/index.js";
+import type { FitOptions } from "../options/fit-options.js";
+import { refuseNoStart, refuseTooFew } from "../refusals.js";
+import { criteria } from "../result/criteria.js";
+import { describeFit } from "../result/describe-fit.js";
+import { type Estimate, estimatesOf } from "../result/estimate-of.js";
+import type { GroupFit } from "../result/group-fit.js";
+import { combinedRows, gather } from "../rows/combined-rows.js";
+import { cutOf } from "../search/cut.js";
+import { type Optimum, optimum } from "../search/optimum.js";
+import { squaresObjective } from "../search/squares-objective.js";
+import { startingPoints } from "../search/starting-points.js";
+import { normalEquations } from "../systems/normal-equations.js";
+import { prepared } from "../systems/prepared.js";
+import { sharedUnknowns } from "../unknowns/shared-unknowns.js";
+import { unknownsOf } from "../unknowns/unknowns.js";
+
+/** Groups fitted together: each group's part of the result, and the constants that hold for all. */
+export interface JointFit {
+  readonly groups: readonly GroupFit[];
+  readonly population: readonly Estimate[];
+}
+
+/**
+ * Fits the same constants to all groups by least squares, with an initial state for every group and one sigma. In each
+ * group's part the errors are those of the common fit; `sumOfSquares` and `count` are the group's own.
+ */
+export function combinedFit(rule: Rule, groups: readonly ObservedGroup[], options: FitOptions): JointFit {
+  const own = groups.map(() => unknownsOf(rule, options));
+  const parts = groups.map((group, g) => prepared(rule, group, own[g]!, options));
+  const { all, maps } = sharedUnknowns(groups, own);
+  const rows = combinedRows(
+    parts.map((part) => part.rows),
+    maps,
+    all.names.length,
+  );
+  if (rows.count < rows.size + 3) throw refuseTooFew(groups[0]!, rows.count, all.names, "values");
+  const starts = groups.map((group, g) => startingPoints(rule, group, options, own[g]!, parts[g]!));
+  const usable = starts.filter((points) => points.length > 0);
+  if (usable.length < groups.length) throw refuseNoStart(groups[0]!, rule.text);
+  const begun = usable.map((points) => joinedStart(points[0]!, starts, maps, rows.size));
+  const cutAt = (sum: number): ReturnType<typeof cutOf> => cutOf(sum, rows.count, rows.size, options);
+  const objective = squaresObjective(normalEquations(rows));
+  const found = optimum(objective, all, begun, cutAt, options.intervals !== "none");
+  const level = options.level ?? 0.95;
+  const left = rows.count - rows.size;
+  const estimates = estimatesOf(rule, all, found, level, left);
+  return {
+    population: estimates.filter(({ role }) => role === "constant"),
+    groups: groups.map((group, g) => {
+      const measures = {
+        criteria: criteria(found.value, rows, options),
+        sigma: Math.sqrt(found.value / left),
+        exact: true,
+      };
+      const part = describeFit(
+        rule,
+        group,
+        options,
+        own[g]!,
+        parts[g]!.rows,
+        partOf(found, maps[g]!, rows.size),
+        measures,
+      );
+      return Object.freeze({ ...part, degreesOfFreedom: left });
+    }),
+  };
+}
+
+/** The constants of one group's start with every group's own initial states. */
+function joinedStart(
+  constants: Float64Array,
+  starts: readonly (readonly Float64Array[])[],
+  maps: readonly Int32Array[],
+  size: number,
+): Float64Array {
+  const whole = new Float64Array(size);
+  maps.forEach((map, g) => {
+    map.forEach((place, k) => {
+      whole[place] = starts[g]![0]![k]!;
+    });
+  });
+  maps[0]!.forEach((place, k) => {
+    if (maps.every((map) => map[k] === place)) whole[place] = constants[k]!;
+  });
+  return whole;
+}
+
+/** What the optimum of all groups says of one group's unknowns. */
+function partOf(found: Optimum, map: Int32Array, size: number): Optimum {
+  const pick = <T>(values: readonly T[]): T[] => Array.from(map, (place) => values[place]!);
+  const own = map.length;
+  return {
+    ...found,
+    at: gather(found.at, map, new Float64Array(own)),
+    profiles: found.profiles && pick(found.profiles),
+    covariance: Float64Array.from(
+      { length: own * own },
+      (_, k) => found.covariance[map[Math.floor(k / own)]! * size + map[k % own]!]!,
+    ),
+    determined: pick(found.determined),
+    separable: pick(found.separable),
+    rivals: found.rivals.map((rival) => ({
+      ...rival,
+      estimates: gather(rival.estimates, map, new Float64Array(own)),
+    })),
+  };
+}

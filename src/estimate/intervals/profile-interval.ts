@@ -1,0 +1,223 @@
+import type { Lowest, Objective } from "../search/objective.js";
+
+/** What a profile starts from: the optimum, and where its cut lies. */
+export interface ProfileProblem {
+  readonly objective: Objective;
+  readonly estimates: Float64Array;
+  /** Lowest sum of squares, or twice the negative log-likelihood. */
+  readonly value: number;
+  readonly lower: Float64Array;
+  readonly upper: Float64Array;
+  /** What an increase is divided by: sigma^2 by the fit's convention; 1 for a likelihood. */
+  readonly variance: number;
+  /** [size, size]: where the other unknowns go when one is moved; NaN where not known. */
+  readonly covariance: Float64Array;
+  /** Other ends of searches, tried where a profile seems to leave its cut. */
+  readonly others: readonly Float64Array[];
+  /** Critical value of the increase. */
+  readonly cut: number;
+  /** The critical value that must be passed on both sides for the unknown to count as determined. */
+  readonly firmCut: number;
+}
+
+/** A profile: its limits, and the places it was computed at for a plot. */
+export interface Profile {
+  /** Undefined on a side where the record gives no limit; `note` says why. */
+  readonly lower: number | undefined;
+  readonly upper: number | undefined;
+  readonly note: string;
+  /** Whether the profile passes the firm cut on both sides. */
+  readonly firm: boolean;
+  /** By increasing value of the unknown: the increase, the other unknowns at their best. */
+  readonly trace: readonly { readonly value: number; readonly increase: number }[];
+  /** A better optimum met on the way, from which the fit must be done again. */
+  readonly better: Float64Array | undefined;
+}
+
+/** Doublings of the distance from the estimate before a side is called unbounded. */
+const doublings = 40;
+/** A side whose profile no longer rises by this share over a doubling, several times running, has no limit. */
+const flat = 1e-4;
+/** Relative precision of a limit, as a share of its distance from the estimate. */
+const precision = 1e-9;
+
+/**
+ * Limits of unknown `i` where the profile crosses its cut.
+ *
+ * On each side the distance is doubled from `spacing` until the cut is passed; the crossing is then found by Newton's
+ * iteration on the signed root of the increase, which is nearly a straight line and whose slope the search gives.
+ *
+ * @see Bates, D. M. and Watts, D. G. (1988), Nonlinear Regression Analysis and Its Applications, section 6.1.
+ */
+export function profileInterval(problem: ProfileProblem, i: number, spacing: number): Profile {
+  const walk = profileWalk(problem, i);
+  const down = side(walk, problem, i, -1, spacing);
+  const up = side(walk, problem, i, 1, spacing);
+  const trace = [...walk.trace, { value: problem.estimates[i]!, increase: 0 }].sort(
+    (a, b) => a.value - b.value,
+  );
+  const note = [down.note, up.note].filter((text) => text !== "").join("; ");
+  return {
+    lower: down.limit,
+    upper: up.limit,
+    note,
+    firm: down.firm && up.firm,
+    trace,
+    better: walk.better(),
+  };
+}
+
+/** Root of the increase minus root of the cut, and its slope. */
+interface Excess {
+  readonly value: number;
+  readonly excess: number;
+  readonly slope: number;
+}
+
+interface Walk {
+  /** At a value of the unknown; an infinite excess where the rule breaks down. */
+  readonly at: (value: number) => Excess;
+  readonly restart: () => void;
+  readonly trace: { value: number; increase: number }[];
+  readonly better: () => Float64Array | undefined;
+}
+
+/** Refits with unknown i held, each time from the optimum at the value before. */
+function profileWalk(problem: ProfileProblem, i: number): Walk {
+  const { objective, estimates, variance, cut } = problem;
+  const lower = problem.lower.slice();
+  const upper = problem.upper.slice();
+  let from: Float64Array = estimates.slice();
+  const trace: { value: number; increase: number }[] = [];
+  let better: Float64Array | undefined;
+  return {
+    trace,
+    better: () => better,
+    restart: () => {
+      from = estimates.slice();
+    },
+    at(value) {
+      lower[i] = value;
+      upper[i] = value;
+      let held = objective.minimise(shifted(problem, from, i, value), lower, upper);
+      const limit = problem.value + cut * variance;
+      // A search that got stuck would make the interval too narrow: outside the cut, other starts are tried as well.
+      if (!(held.value <= limit)) held = lowestOf(held, problem, lower, upper, i, value);
+      const slope = objective.slope(i);
+      if (!Number.isFinite(held.value)) return { value, excess: Number.POSITIVE_INFINITY, slope: 0 };
+      from = held.estimates;
+      const rise = held.value - problem.value;
+      if (rise < -1e-6 * variance) better = from.slice();
+      const increase = Math.max(0, rise) / variance;
+      trace.push({ value, increase });
+      const root = Math.sqrt(increase);
+      return { value, excess: root - Math.sqrt(cut), slope: slope / (2 * variance * root) };
+    },
+  };
+}
+
+/** The lowest of a search and of those from other ends, the last one made being the one kept. */
+function lowestOf(
+  held: Lowest,
+  problem: ProfileProblem,
+  lower: Float64Array,
+  upper: Float64Array,
+  i: number,
+  value: number,
+): Lowest {
+  let best = held;
+  for (const other of problem.others) {
+    const found = problem.objective.minimise(shifted(problem, other, i, value), lower, upper);
+    if (found.value < best.value) best = found;
+  }
+  // The slope is that of the search made last.
+  return problem.others.length === 0 ? best : problem.objective.minimise(best.estimates, lower, upper);
+}
+
+/** A point moved to a value of unknown i, the others going along as their covariance with it says where that is lower. */
+function shifted(
+  { covariance, objective }: ProfileProblem,
+  from: Float64Array,
+  i: number,
+  value: number,
+): Float64Array {
+  const size = from.length;
+  const spread = covariance[i * size + i]!;
+  const move = value - from[i]!;
+  const still = from.slice();
+  still[i] = value;
+  if (!(spread > 0)) return still;
+  const moved = from.map((here, k) => here + (covariance[k * size + i]! / spread) * move);
+  moved[i] = value;
+  return objective.value(moved) < objective.value(still) ? moved : still;
+}
+
+interface Side {
+  readonly limit: number | undefined;
+  readonly firm: boolean;
+  readonly note: string;
+}
+
+function side(walk: Walk, problem: ProfileProblem, i: number, direction: 1 | -1, spacing: number): Side {
+  const estimate = problem.estimates[i]!;
+  const bound = direction > 0 ? problem.upper[i]! : problem.lower[i]!;
+  const name = direction > 0 ? "upper" : "lower";
+  const none = (note: string): Side => ({ limit: undefined, firm: false, note });
+  if (estimate === bound) return none(`no ${name} limit before the bound ${bound}`);
+  walk.restart();
+  const root = Math.sqrt(problem.cut);
+  const firm = Math.sqrt(problem.firmCut) - root;
+  const places = outward(walk, estimate, direction * spacing, bound, firm, root);
+  const outside = places.findIndex((place) => place.excess >= 0);
+  if (outside < 0)
+    return none(
+      Number.isFinite(bound)
+        ? `no ${name} limit before the bound ${bound}`
+        : `no ${name} limit from this record`,
+    );
+  const inside = places[outside - 1] ?? { value: estimate, excess: -root, slope: 0 };
+  const passed = places[places.length - 1]!.excess >= firm;
+  const limit = crossing(walk, estimate, inside, places[outside]!);
+  return { limit, firm: passed, note: passed ? "" : `the ${name} limit is lost at a slightly higher level` };
+}
+
+/** Places at doubling distances, until the excess is firm, the bound is reached, or the profile stays level. */
+function outward(
+  walk: Walk,
+  estimate: number,
+  spacing: number,
+  bound: number,
+  firm: number,
+  root: number,
+): readonly Excess[] {
+  const places: Excess[] = [];
+  let before = -root;
+  let level = 0;
+  for (let k = 0; k < doublings && !(level >= 4 && k >= 8); k++) {
+    const free = estimate + spacing * 2 ** k;
+    const here = walk.at(spacing > 0 ? Math.min(free, bound) : Math.max(free, bound));
+    places.push(here);
+    if (here.excess >= firm || here.value === bound) break;
+    level = here.excess - before < flat * root ? level + 1 : 0;
+    before = here.excess;
+  }
+  return places;
+}
+
+/** The value between `inside` and `outside` at which the profile meets its cut: Newton's iteration, kept between. */
+function crossing(walk: Walk, estimate: number, inside: Excess, outside: Excess): number {
+  let low = inside;
+  let high = outside;
+  let best = Math.abs(high.excess) < Math.abs(low.excess) ? high : low;
+  for (let round = 0; round < 60; round++) {
+    const close = precision * Math.abs(best.value - estimate);
+    if (Math.abs(high.value - low.value) <= close) break;
+    const newton = best.value - best.excess / best.slope;
+    const within = (newton - low.value) * (newton - high.value) < 0;
+    if (within && Math.abs(newton - best.value) <= close) return newton;
+    best = walk.at(within ? newton : (low.value + high.value) / 2);
+    if (best.excess < 0) low = best;
+    else high = best;
+  }
+  return best.value;
+}

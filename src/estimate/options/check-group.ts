@@ -1,0 +1,78 @@
+import type { ObservedGroup } from "../../record/index.js";
+import { inputReach, type Rule } from "../../rule/index.js";
+import {
+  refuseAllCensored,
+  refuseInputGap,
+  refuseMissingInput,
+  refuseNoChange,
+  refuseNoCount,
+  refuseNoLogarithm,
+  refuseTooFew,
+} from "../refusals.js";
+import { recordedPairs } from "../rows/recorded-pairs.js";
+import { longestLag } from "../unknowns/slots.js";
+import type { Unknowns } from "../unknowns/unknowns.js";
+import { type FitOptions, onLogScale } from "./fit-options.js";
+
+/** Refuses a group from which no honest fit can come. */
+export function checkGroup(rule: Rule, group: ObservedGroup, options: FitOptions, unknowns: Unknowns): void {
+  checkNumber(rule, group, options, unknowns.names);
+  checkInputs(rule, group, options);
+  for (const state of rule.states) {
+    checkState(group, state, options);
+    checkCensoring(group, state);
+  }
+}
+
+function checkNumber(rule: Rule, group: ObservedGroup, options: FitOptions, names: readonly string[]): void {
+  const pairs = options.errors === "process";
+  const usable = pairs ? recordedPairs(rule, group).to.length : group.index.length;
+  if (usable < names.length + 3) throw refuseTooFew(group, usable, names, pairs ? "pairs" : "values");
+}
+
+/** Every input must be recorded in every period that a fitted step reads. */
+function checkInputs(rule: Rule, group: ObservedGroup, options: FitOptions): void {
+  const reach = rule.inputs.length === 0 ? [] : inputReach(rule);
+  rule.inputs.forEach((name, k) => {
+    const column = group.inputs[name];
+    if (!column) throw refuseMissingInput(name, group);
+    const [earliest, latest] = reach[k]!;
+    const known = new Set(Array.from(group.index).filter((_, i) => Number.isFinite(column[i])));
+    for (const period of steppedPeriods(rule, group, options))
+      for (let at = period + earliest; at <= period + latest; at++)
+        if (!known.has(at)) throw refuseInputGap(name, group, at);
+  });
+}
+
+/** The periods from which the fit takes a step. */
+function steppedPeriods(rule: Rule, group: ObservedGroup, options: FitOptions): readonly number[] {
+  const last = group.index[group.index.length - 1]!;
+  const all = Array.from({ length: last }, (_, period) => period);
+  if (options.errors !== "process") return all.filter((period) => period >= longestLag(rule));
+  const { from, to } = recordedPairs(rule, group);
+  return all.filter((period) =>
+    Array.from(from).some((entry, pair) => group.index[entry]! <= period && period < group.index[to[pair]!]!),
+  );
+}
+
+function checkState(group: ObservedGroup, state: string, options: FitOptions): void {
+  const values = group.values[state]!;
+  const censoring = group.censoring?.[state];
+  if (values.every((value) => value === values[0]) && !censoring?.some((mark) => mark !== 0))
+    throw refuseNoChange(group, values[0]!);
+  const counts = options.spread === "poisson" || options.spread === "negative-binomial";
+  const wrong = (value: number): boolean =>
+    onLogScale(options) ? value <= 0 : counts && !(value >= 0 && Number.isInteger(value));
+  const bad = values.findIndex(wrong);
+  if (bad < 0) return;
+  const refuse = counts ? refuseNoCount : refuseNoLogarithm;
+  throw refuse(group, group.rows[bad]!, values[bad]!);
+}
+
+function checkCensoring(group: ObservedGroup, state: string): void {
+  const censoring = group.censoring?.[state];
+  if (!censoring) return;
+  const sides = new Set(censoring);
+  if (sides.has(0) || sides.size > 1) return;
+  throw refuseAllCensored(group, state, sides.has(1) ? "above" : "below");
+}

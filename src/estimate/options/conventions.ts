@@ -1,0 +1,79 @@
+import type { GroupFit } from "../result/group-fit.js";
+import type { FitOptions } from "./fit-options.js";
+
+/** The conventions behind the numbers of a fit, a sentence each, printed with every table of it. */
+export function conventionsOf(options: FitOptions, groups: readonly GroupFit[]): readonly string[] {
+  const filter = groups.find((group) => group.filter !== undefined)?.filter;
+  return [
+    errorSentence(options),
+    ...(filter ? [filterSentence(filter)] : []),
+    spreadSentence(options),
+    intervalSentence(options, groups),
+    ...(options.robust === true ? [robustSentence] : []),
+    ...groupSentence(options),
+    ...(options.factor === undefined
+      ? []
+      : ["The record reads a state up to a factor, which counts as an unknown."]),
+  ];
+}
+
+const robustSentence =
+  "Values more than 1.345 robust standard deviations off count for less (Huber's weights); errors and intervals take the weights as given.";
+
+function errorSentence({ errors }: FitOptions): string {
+  if (errors === "observation")
+    return "Error in the observation: whole trajectory fitted, initial state estimated unless given.";
+  return errors === "process"
+    ? "Error in the process: each step fitted from the recorded value before it, over a gap by as many steps."
+    : "Error in both the process and the observation: likelihood of the readings by the Kalman filter.";
+}
+
+function filterSentence({ method, start, check }: NonNullable<GroupFit["filter"]>): string {
+  const filter =
+    method === "exact"
+      ? "The filter is exact, the rule being linear on the fitting scale"
+      : "The filter takes the rule's slope at the estimated state (extended)";
+  const first =
+    start === "stationary"
+      ? "the first reading is taken from the rule's long-run distribution (stationary start)"
+      : "the first reading is taken as read and left out of the likelihood (diffuse start)";
+  const checked =
+    check === undefined
+      ? ""
+      : ` Log-likelihood ${check.filter.toFixed(2)}, by particles ${check.particles.toFixed(2)} (sd ${check.deviation.toFixed(2)}).`;
+  return `${filter}; ${first}.${checked}`;
+}
+
+function spreadSentence({ spread = "constant" }: FitOptions): string {
+  if (typeof spread === "object") return `Normal errors of the known standard deviation ${spread.sd}.`;
+  switch (spread) {
+    case "proportional":
+      return "Spread proportional to the level: normal errors on the log scale.";
+    case "constant":
+      return "Spread constant at every level: normal errors.";
+    case "poisson":
+      return "Counts: variance equal to the mean (Poisson).";
+    case "negative-binomial":
+      return "Counts: variance = mean + dispersion * mean^2 (negative binomial).";
+  }
+}
+
+function intervalSentence(options: FitOptions, groups: readonly GroupFit[]): string {
+  const spreads = groups.some((group) => group.estimates.some(({ role }) => role === "spread"));
+  const likelihood = spreads || options.spread === "poisson" || typeof options.spread === "object";
+  if (likelihood)
+    return "Standard errors by the curvature of the log-likelihood; profile cut chi-square(1); AICc counts every unknown.";
+  const cut =
+    options.cut === "chi-square" ? "profile cut chi-square(1), sigma^2 = RSS/n" : "profile cut F(1, n - p)";
+  return `Standard errors by sigma^2 = RSS/(n - p); ${cut}; AICc by RSS/n on the fitting scale, counting sigma.`;
+}
+
+function groupSentence({ groups = "separate" }: FitOptions): string[] {
+  if (groups === "combined")
+    return ["The same constants and sigma for all groups, an initial state for each."];
+  if (groups === "mixed")
+    return [
+      "Constants differ among groups as draws from a normal population, integrated out by Laplace's method; a group's own are drawn towards its means.",
+    ];
+  return [];
+}

@@ -1,0 +1,159 @@
+import type { Warning } from "../../numeric/index.js";
+import { type Rule, roughness } from "../../rule/index.js";
+import type { FitOptions } from "../options/fit-options.js";
+import type { Optimum } from "../search/optimum.js";
+import type { Unknowns } from "../unknowns/unknowns.js";
+import type { Estimate } from "./estimate-of.js";
+import type { GroupFit } from "./group-fit.js";
+import { slopeWarnings } from "./slope-warnings.js";
+
+/** Usable values a constant below which a fit carries a caution: common practice, no source. */
+const comfortable = 8;
+/** Correlation of two estimates above which they are named as hard to separate: common practice, no source. */
+const strong = 0.99;
+
+/** What a fit's warnings are drawn from. */
+export interface FitContext {
+  readonly rule: Rule;
+  readonly options: FitOptions;
+  readonly unknowns: Unknowns;
+  readonly found: Optimum;
+}
+
+/** What a reader of the fit must know, besides its numbers. */
+export function fitWarnings(fit: Omit<GroupFit, "warnings">, context: FitContext): readonly Warning[] {
+  return [
+    ...stopWarning(fit),
+    ...undetermined(fit, context),
+    ...spreadsNotSeparated(fit),
+    ...atBounds(fit, context.unknowns),
+    ...rivals(fit),
+    ...correlated(fit),
+    ...bends(fit, context.rule),
+    ...slopeWarnings(fit, context),
+    ...fewValues(fit),
+  ];
+}
+
+function stopWarning(fit: Omit<GroupFit, "warnings">): Warning[] {
+  if (fit.stop.kind === "converged") return [];
+  const why = fit.stop.kind === "failed" ? fit.stop.reason : "it ran out of iterations";
+  return [
+    {
+      code: "not-converged",
+      message: `The search did not converge (${why}): read the estimates as a last state, not as a fit. Give { start } or { bounds }.`,
+    },
+  ];
+}
+
+function undetermined(fit: Omit<GroupFit, "warnings">, { found }: FitContext): Warning[] {
+  const loose = fit.estimates.filter((each) => each.standardError === undefined && each.role !== "spread");
+  const together = loose.filter((each) => !found.separable[fit.estimates.indexOf(each)]);
+  const combination =
+    together.length > 1
+      ? `only a combination of ${together.map(({ name }) => name).join(" and ")} enters`
+      : "no value of it changes the fit";
+  const reason = (each: Estimate): string => {
+    if (hasRunOff(fit, each.value)) return "its best value lies beyond any limit";
+    return together.includes(each) ? combination : each.profile.note || "its profile has no limit";
+  };
+  return loose.map((each) => ({
+    code: "not-determined",
+    message: `${each.name} is not determined by this record (${reason(each)}).`,
+  }));
+}
+
+/** The split of process and observation error, or a dispersion, that the record leaves open. */
+function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">): Warning[] {
+  const loose = fit.estimates.filter((each) => each.role === "spread" && each.standardError === undefined);
+  if (loose.length === 0) return [];
+  const limits = loose.map(
+    ({ name, profile }) => `${name} from ${shown(profile.lower, "0")} to ${shown(profile.upper, "no limit")}`,
+  );
+  const both = fit.filter !== undefined || fit.estimates.some(({ name }) => name.startsWith("process error"));
+  return [
+    {
+      code: both ? "errors-not-separated" : "not-determined",
+      message: both
+        ? `The record separates the two errors only weakly (${limits.join("; ")}). Give the reading's standard deviation with { spread: { sd } } if replicates tell it.`
+        : `The record gives no two-sided interval: ${limits.join("; ")}.`,
+    },
+  ];
+}
+
+const shown = (limit: number | undefined, none: string): string => limit?.toPrecision(3) ?? none;
+
+/** Constants this many times beyond every value of the record, and beyond 1, have run off. */
+const runaway = 1e6;
+
+function hasRunOff(fit: Omit<GroupFit, "warnings">, value: number): boolean {
+  const most = fit.points.reduce((high, { observed }) => Math.max(high, Math.abs(observed)), 1);
+  return Math.abs(value) > runaway * most;
+}
+
+function valueShown(fit: Omit<GroupFit, "warnings">, value: number): string {
+  return hasRunOff(fit, value) ? "beyond any limit" : value.toPrecision(4);
+}
+
+function atBounds(fit: Omit<GroupFit, "warnings">, unknowns: Unknowns): Warning[] {
+  return fit.estimates
+    .filter((estimate, i) => estimate.value === unknowns.lower[i] || estimate.value === unknowns.upper[i])
+    .map((estimate) => ({
+      code: "at-bound",
+      message: `${estimate.name} sits on its bound ${estimate.value}: its interval is one-sided at best.`,
+    }));
+}
+
+function rivals(fit: Omit<GroupFit, "warnings">): Warning[] {
+  if (fit.rivals.length === 0) return [];
+  const told = fit.rivals.map(({ estimates, behind }) => {
+    const values = estimates.map((value, i) => `${fit.estimates[i]!.name} ${valueShown(fit, value)}`);
+    return `${values.join(", ")} (${behind.toFixed(2)} log-likelihood units behind)`;
+  });
+  return [
+    {
+      code: "two-optima",
+      message: `Different constants explain the record almost equally: ${told.join("; ")}. Give { start } or { bounds } if one can be ruled out.`,
+    },
+  ];
+}
+
+function correlated(fit: Omit<GroupFit, "warnings">): Warning[] {
+  const size = fit.estimates.length;
+  const pairs = fit.estimates.flatMap((a, i) =>
+    fit.estimates.slice(i + 1).map((b, k) => [a, b, i, i + 1 + k] as const),
+  );
+  const entry = (i: number, j: number): number => fit.covariance[i * size + j]!;
+  return pairs
+    .map(([a, b, i, j]) => ({ a, b, correlation: entry(i, j) / Math.sqrt(entry(i, i) * entry(j, j)) }))
+    .filter(({ correlation }) => Math.abs(correlation) > strong)
+    .map(({ a, b, correlation }) => ({
+      code: "strong-correlation",
+      message: `${pair(a, b)} are hard to separate (correlation ${correlation.toFixed(3)}): their combination is known better than either.`,
+    }));
+}
+
+const pair = (a: Estimate, b: Estimate): string => `${a.name} and ${b.name}`;
+
+/** At a smooth optimum the search ends on its gradient; on a bend of the rule it cannot. */
+function bends(fit: Omit<GroupFit, "warnings">, rule: Rule): Warning[] {
+  const [bend] = roughness(rule).kinks;
+  const smooth = fit.stop.kind === "converged" && fit.stop.test === "gradient";
+  if (bend === undefined || smooth) return [];
+  return [
+    {
+      code: "on-a-bend",
+      message: `The fit sits where the rule bends, at ${bend.function}(...): its standard errors do not hold there. Read the profiles.`,
+    },
+  ];
+}
+
+function fewValues(fit: Omit<GroupFit, "warnings">): Warning[] {
+  if (fit.count >= comfortable * fit.estimates.length) return [];
+  return [
+    {
+      code: "few-values",
+      message: `${fit.count} values for ${fit.estimates.length} unknowns: fewer than ${comfortable} each, so read the intervals as rough.`,
+    },
+  ];
+}

@@ -1,0 +1,75 @@
+import type { ObservedGroup } from "../../record/index.js";
+import type { Rule } from "../../rule/index.js";
+import { type FitOptions, onLogScale } from "../options/fit-options.js";
+import { longestLag, slotsOf } from "../unknowns/slots.js";
+import { rootWeight, valueTable } from "./value-table.js";
+
+/** The readings of a group in the order in which a filter takes them in. All arrays have one entry a reading. */
+export interface Readings {
+  readonly count: number;
+  readonly periods: Int32Array;
+  readonly entries: Int32Array;
+  readonly states: Int32Array;
+  /** On the fitting scale, and in the record's own unit. */
+  readonly values: Float64Array;
+  readonly observed: Float64Array;
+  readonly roots: Float64Array;
+  /** Period at which the filter begins, and how many readings lie there. */
+  readonly first: number;
+  readonly skipped: number;
+  /** [slots], on the fitting scale: the state vector as read where the filter begins. */
+  readonly beginning: Float64Array;
+  /** Puts other values [rows of the group, states] in the record's place. */
+  take(values: Float64Array): void;
+}
+
+/** Orders the readings of a group for a filter. */
+export function readingsOf(rule: Rule, group: ObservedGroup, options: FitOptions): Readings {
+  const states = rule.states.length;
+  const log = onLogScale(options);
+  const first = longestLag(rule);
+  const recorded = valueTable(rule, group);
+  const cells = Array.from(recorded, (value, k) => ({
+    value,
+    entry: Math.floor(k / states),
+    state: k % states,
+  }))
+    .filter(({ value }) => !Number.isNaN(value))
+    .filter(({ entry }) => group.index[entry]! >= first);
+  const slots = slotsOf(rule).map(({ state, lag }) => ({
+    state: rule.states.indexOf(state),
+    entry: Math.max(
+      0,
+      group.index.findIndex((index) => index >= first - lag),
+    ),
+  }));
+  const values = new Float64Array(cells.length);
+  const observed = new Float64Array(cells.length);
+  const beginning = new Float64Array(slots.length);
+  const scaled = (value: number): number => (log ? Math.log(value) : value);
+  const take = (given: Float64Array): void => {
+    cells.forEach(({ entry, state }, i) => {
+      observed[i] = given[entry * states + state]!;
+      values[i] = scaled(observed[i]!);
+    });
+    slots.forEach(({ entry, state }, s) => {
+      beginning[s] = scaled(given[entry * states + state]!);
+    });
+  };
+  take(recorded);
+  return {
+    count: cells.length,
+    periods: Int32Array.from(cells, ({ entry }) => group.index[entry]!),
+    entries: Int32Array.from(cells, ({ entry }) => entry),
+    states: Int32Array.from(cells, ({ state }) => state),
+    values,
+    observed,
+    roots: Float64Array.from(cells, ({ entry, state }) =>
+      rootWeight(group, rule.states[state]!, entry, undefined),
+    ),
+    first,
+    skipped: cells.filter(({ entry }) => group.index[entry] === first).length,
+    beginning,
+    take,
+  };
+}

@@ -1,0 +1,57 @@
+import type { Readings } from "../rows/readings.js";
+
+/** A rule of one state that is linear on the fitting scale, u' = intercept + slope u, with its errors' variances. */
+export interface LinearRule {
+  readonly intercept: number;
+  readonly slope: number;
+  readonly processVariance: number;
+  readonly readingVariance: number;
+}
+
+/** A normal distribution of a single state, moved in place. */
+export interface ScalarBelief {
+  mean: number;
+  variance: number;
+}
+
+/** The long run of a stable rule; undefined where |slope| is not below 1. */
+export function longRun({ intercept, slope, processVariance }: LinearRule): ScalarBelief | undefined {
+  if (!(Math.abs(slope) < 1)) return undefined;
+  return { mean: intercept / (1 - slope), variance: processVariance / (1 - slope * slope) };
+}
+
+/**
+ * Log-likelihood of the readings from number `from` on, by the exact Kalman filter in plain numbers, the belief
+ * standing at the period where the readings begin.
+ *
+ * @param predicted - receives the one-step predictions, where given.
+ */
+export function linearFilter(
+  rule: LinearRule,
+  readings: Readings,
+  from: number,
+  belief: ScalarBelief,
+  predicted: Float64Array | undefined,
+): number {
+  const { intercept, slope, processVariance } = rule;
+  const { periods, values, roots, count } = readings;
+  let { mean, variance } = belief;
+  let period = readings.first;
+  let sum = 0;
+  for (let i = from; i < count; i++) {
+    for (; period < periods[i]!; period++) {
+      mean = intercept + slope * mean;
+      variance = slope * slope * variance + processVariance;
+    }
+    if (predicted !== undefined) predicted[i] = mean;
+    const spread = variance + rule.readingVariance / (roots[i]! * roots[i]!);
+    const surprise = values[i]! - mean;
+    const gain = variance / spread;
+    mean += gain * surprise;
+    variance -= gain * variance;
+    sum -= Math.log(spread) + (surprise * surprise) / spread;
+  }
+  belief.mean = mean;
+  belief.variance = variance;
+  return 0.5 * (sum - (count - from) * Math.log(2 * Math.PI));
+}

@@ -1,0 +1,110 @@
+import type { RandomStream } from "../../numeric/index.js";
+import type { Rule } from "../../rule/index.js";
+import type { Readings } from "../rows/readings.js";
+import type { Dynamics } from "./kalman-step.js";
+
+/** A cloud of possible states, moved and drawn anew in place. */
+interface Cloud {
+  /** [particles, slots], in the record's own unit, and a copy to draw from. */
+  readonly states: Float64Array;
+  readonly drawn: Float64Array;
+  readonly weights: Float64Array;
+  readonly slots: number;
+}
+
+/** What particles need to know of a state-space model at its estimates. */
+export interface ParticleModel {
+  readonly rule: Rule;
+  readonly dynamics: Dynamics;
+  readonly constants: Float64Array;
+  readonly readings: Readings;
+  /** By state, on the fitting scale. */
+  readonly processSd: ArrayLike<number>;
+  readonly readingSd: ArrayLike<number>;
+}
+
+/**
+ * Log-likelihood of the readings after the first ones by a bootstrap particle filter, the beginning being the first
+ * readings with their own error. It rests on no linearisation, only on the number of particles.
+ *
+ * @see Gordon, Salmond and Smith (1993), IEE Proceedings F 140:107.
+ */
+export function particleLikelihood(model: ParticleModel, particles: number, stream: RandomStream): number {
+  const { dynamics, readings } = model;
+  const slots = readings.beginning.length;
+  const cloud: Cloud = {
+    states: new Float64Array(particles * slots),
+    drawn: new Float64Array(particles * slots),
+    weights: new Float64Array(particles),
+    slots,
+  };
+  begin(model, cloud, stream);
+  let period = readings.first;
+  let sum = 0;
+  for (let i = readings.skipped; i < readings.count; i++) {
+    for (; period < readings.periods[i]!; period++) move(model, cloud, period, stream);
+    const s = readings.states[i]!;
+    sum += weigh(cloud, s, readings.values[i]!, model.readingSd[s]! / readings.roots[i]!, dynamics.log);
+    drawAnew(cloud, stream);
+  }
+  return sum;
+}
+
+function begin(
+  { readings, readingSd, dynamics }: ParticleModel,
+  { states, slots }: Cloud,
+  stream: RandomStream,
+): void {
+  for (let k = 0; k < states.length; k++) {
+    const slot = k % slots;
+    const value = readings.beginning[slot]! + readingSd[slot % dynamics.states]! * stream.normal();
+    states[k] = dynamics.log ? Math.exp(value) : value;
+  }
+}
+
+function move(model: ParticleModel, { states, slots }: Cloud, period: number, stream: RandomStream): void {
+  const { dynamics, constants, processSd } = model;
+  const { value: state, compiled, inputs, log } = dynamics;
+  for (let first = 0; first < states.length; first += slots) {
+    for (let s = 0; s < slots; s++) state[s] = states[first + s]!;
+    compiled.step(state, constants, inputs, period, state);
+    for (let s = 0; s < dynamics.states; s++) {
+      const error = processSd[s]! * stream.normal();
+      state[s] = log ? state[s]! * Math.exp(error) : state[s]! + error;
+    }
+    for (let s = 0; s < slots; s++) states[first + s] = state[s]!;
+  }
+}
+
+/** Weighs every particle by the density of the reading; returns the logarithm of their mean. */
+function weigh(
+  { states, weights, slots }: Cloud,
+  s: number,
+  reading: number,
+  sd: number,
+  log: boolean,
+): number {
+  let sum = 0;
+  for (let p = 0; p < weights.length; p++) {
+    const value = states[p * slots + s]!;
+    const z = (reading - (log ? Math.log(value) : value)) / sd;
+    const density = Math.exp(-0.5 * z * z) / (sd * Math.sqrt(2 * Math.PI));
+    weights[p] = Number.isFinite(density) ? density : 0;
+    sum += weights[p]!;
+  }
+  return Math.log(sum / weights.length);
+}
+
+/** Draws as many particles by their weights, at equal spacings from one random place. */
+function drawAnew({ states, drawn, weights, slots }: Cloud, stream: RandomStream): void {
+  const total = weights.reduce((sum, weight) => sum + weight, 0);
+  const spacing = total / weights.length;
+  let reached = weights[0]!;
+  let from = 0;
+  for (let p = 0; p < weights.length; p++) {
+    const wanted = spacing * (p + stream.uniform());
+    while (reached < wanted && from < weights.length - 1) reached += weights[++from]!;
+    for (let s = 0; s < slots; s++) drawn[p * slots + s] = states[from * slots + s]!;
+  }
+  states.set(drawn);
+}

@@ -1,0 +1,33 @@
+import type { LinearisedSystem } from "../../numeric/index.js";
+import type { PathSums } from "../../rule/index.js";
+import type { RecordedPath } from "../rows/recorded-path.js";
+import { place, type Unknowns } from "../unknowns/unknowns.js";
+import { packedSums } from "./packed-sums.js";
+
+/**
+ * The least-squares system of a trajectory fit, its sums gathered in the same pass as the path by `pathSums`.
+ */
+export function trajectorySystem(
+  pathSums: PathSums,
+  unknowns: Unknowns,
+  {
+    inputs,
+    first,
+    periods,
+    table,
+    weights,
+  }: Pick<RecordedPath, "inputs" | "first" | "periods" | "table" | "weights">,
+): LinearisedSystem {
+  const { columns, constants, initial } = unknowns;
+  const { sums, triangle, projected, factor } = packedSums(columns, constants.length + initial.length);
+  return {
+    size: columns.length,
+    triangle,
+    projected,
+    evaluate(at) {
+      place(unknowns, at);
+      return pathSums(initial, constants, inputs, first, periods, table, weights, sums);
+    },
+    linearise: factor,
+  };
+}
