@@ -1,22 +1,22 @@
-export type { AcrossUnits } from "./across-units.js";
-export { amount } from "./amount.js";
-export { type Best, type BestOptions, best } from "./best.js";
-export type { DeltaMargin } from "./delta-margin.js";
-export type { Measure } from "./measure.js";
-export {
-  type NextReading,
-  type NextReadingOptions,
-  nextReading,
-  type ReadingChoice,
-} from "./next-reading.js";
-export type { GroupReach, Reach, ReachOptions } from "./reach.js";
-export { reaches } from "./reaches.js";
+export { type Best, type BestOptions, best } from "./choice/best.js";
 export {
   type Sensitivity,
   type SensitivityOptions,
   type SensitivityRow,
   sensitivity,
-} from "./sensitivity.js";
-export type { Solution, Solved, SolveOptions, Target } from "./solution.js";
-export { solveFor } from "./solve-for.js";
-export { type Tradeoff, type TradeoffOptions, tradeoff } from "./tradeoff.js";
+} from "./choice/sensitivity.js";
+export type { Solution, Solved, SolveOptions, Target } from "./choice/solution.js";
+export { solveFor } from "./choice/solve-for.js";
+export { type Tradeoff, type TradeoffOptions, tradeoff } from "./choice/tradeoff.js";
+export type { Measure } from "./measure/measure.js";
+export type { AcrossUnits } from "./reach/across-units.js";
+export type { DeltaMargin } from "./reach/delta-margin.js";
+export type { GroupReach, Reach, ReachOptions } from "./reach/reach.js";
+export { reaches } from "./reach/reaches.js";
+export {
+  type NextReading,
+  type NextReadingOptions,
+  nextReading,
+  type ReadingChoice,
+} from "./reading/next-reading.js";
+export { amount } from "./words/amount.js";

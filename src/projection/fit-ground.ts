@@ -2,8 +2,8 @@ import type { Fit, GroupFit } from "../estimate/index.js";
 import type { ObservedGroup } from "../record/index.js";
 import { compileRule, type Rule } from "../rule/index.js";
 import type { Ground } from "./central-path.js";
-import type { InputPlans } from "./input-plan.js";
-import { plannedInputs } from "./planned-inputs.js";
+import type { InputPlans } from "./inputs/input-plan.js";
+import { plannedInputs } from "./inputs/planned-inputs.js";
 import { refuseGap } from "./refusals.js";
 
 /** A ground, and where the fit's unknowns stand in it. */

@@ -3,20 +3,20 @@ import type { RandomStream } from "../numeric/index.js";
 import { readsPeriod } from "../rule/index.js";
 import { type CentralPath, centralPath, stateLimits } from "./central-path.js";
 import { keepLimit } from "./check-run.js";
-import { type DrawnStarts, drawnStarts, type UnknownsDraw, unknownsDraw } from "./drawn-starts.js";
-import { blockStreams, type EnsembleRun, runEnsemble } from "./ensemble.js";
+import { type DrawnStarts, drawnStarts, type UnknownsDraw, unknownsDraw } from "./constants/drawn-starts.js";
+import { blockStreams, type EnsembleRun, runEnsemble } from "./ensemble/ensemble.js";
+import { type Gatherer, gatherer } from "./ensemble/gather.js";
+import { passagesOf, placedWatches } from "./ensemble/placed-watches.js";
 import { type FitGround, fitGround } from "./fit-ground.js";
-import { fittedNoise } from "./fitted-noise.js";
 import type { ForecastOptions, ForecastSettings } from "./forecast-options.js";
 import { forecastWarnings } from "./forecast-warnings.js";
-import { type Gatherer, gatherer } from "./gather.js";
-import { noiseDraw } from "./noise.js";
+import type { Scenario } from "./inputs/scenarios.js";
+import { fittedNoise } from "./noise/fitted-noise.js";
+import { noiseDraw } from "./noise/noise.js";
 import { periodLabels } from "./period-labels.js";
-import { passagesOf, placedWatches } from "./placed-watches.js";
 import { type Predictability, predictabilityOf } from "./predictability.js";
 import type { GroupForecast } from "./projected-group.js";
 import { refuseNoPath } from "./refusals.js";
-import type { Scenario } from "./scenarios.js";
 
 type Settled = ForecastOptions & ForecastSettings;
 

@@ -1,6 +1,6 @@
-import type { InputPlans } from "./input-plan.js";
-import type { Watch } from "./passage.js";
-import type { Scenarios } from "./scenarios.js";
+import type { Watch } from "./ensemble/passage.js";
+import type { InputPlans } from "./inputs/input-plan.js";
+import type { Scenarios } from "./inputs/scenarios.js";
 
 /** Options of `forecast`. */
 export interface ForecastOptions {

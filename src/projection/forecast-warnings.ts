@@ -1,7 +1,7 @@
 import type { GroupFit } from "../estimate/index.js";
 import type { Warning } from "../numeric/index.js";
 import type { CentralPath } from "./central-path.js";
-import type { DrawnStarts } from "./drawn-starts.js";
+import type { DrawnStarts } from "./constants/drawn-starts.js";
 import type { FitGround } from "./fit-ground.js";
 import type { Predictability } from "./predictability.js";
 import { rangeWarnings } from "./range-warnings.js";

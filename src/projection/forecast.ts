@@ -3,8 +3,8 @@ import { randomStream } from "../numeric/index.js";
 import { checkRun } from "./check-run.js";
 import { forecastGroup } from "./forecast-group.js";
 import type { ForecastOptions, ForecastSettings } from "./forecast-options.js";
+import { scenariosOf } from "./inputs/scenarios.js";
 import type { GroupForecast } from "./projected-group.js";
-import { scenariosOf } from "./scenarios.js";
 
 /** A fit carried forward, with its uncertainties kept apart. */
 export interface Forecast {

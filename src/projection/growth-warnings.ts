@@ -1,6 +1,6 @@
 import type { Warning } from "../numeric/index.js";
 import type { Rule } from "../rule/index.js";
-import type { GatheredState } from "./gather.js";
+import type { GatheredState } from "./ensemble/gather.js";
 
 /** Where the mean of the paths grows and a typical path does not, or grows less: which of the two to read. */
 export function growthWarnings(rule: Rule, states: readonly GatheredState[], period: string): Warning[] {

@@ -1,6 +1,6 @@
 import { quantile } from "../numeric/index.js";
 import type { CompiledRule } from "../rule/index.js";
-import type { Starts } from "./ensemble.js";
+import type { Starts } from "./ensemble/ensemble.js";
 
 /** Whether nearby paths part, by the largest Lyapunov exponent over the constants drawn. */
 export interface Predictability {

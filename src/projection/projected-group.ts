@@ -1,8 +1,8 @@
 import type { Warning } from "../numeric/index.js";
-import type { Band } from "./band.js";
-import type { Growth } from "./growth.js";
-import type { InputPlans } from "./input-plan.js";
-import type { Passage } from "./passage.js";
+import type { Band } from "./ensemble/band.js";
+import type { Growth } from "./ensemble/growth.js";
+import type { Passage } from "./ensemble/passage.js";
+import type { InputPlans } from "./inputs/input-plan.js";
 import type { PathDraws } from "./path-draws.js";
 import type { Predictability } from "./predictability.js";
 

@@ -3,18 +3,18 @@ import { randomStream } from "../numeric/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../rule/index.js";
 import { centralPath, type Ground, stateLimits } from "./central-path.js";
 import { checkRun, keepLimit } from "./check-run.js";
-import { blockStreams, runEnsemble } from "./ensemble.js";
-import { gatherer } from "./gather.js";
+import { blockStreams, runEnsemble } from "./ensemble/ensemble.js";
+import { gatherer } from "./ensemble/gather.js";
+import type { Watch } from "./ensemble/passage.js";
+import { passagesOf, placedWatches } from "./ensemble/placed-watches.js";
 import { growthWarnings } from "./growth-warnings.js";
-import type { InputPlans } from "./input-plan.js";
-import { type Noise, noiseDraw } from "./noise.js";
-import type { Watch } from "./passage.js";
-import { passagesOf, placedWatches } from "./placed-watches.js";
-import { plannedInputs } from "./planned-inputs.js";
+import type { InputPlans } from "./inputs/input-plan.js";
+import { plannedInputs } from "./inputs/planned-inputs.js";
+import { type Scenarios, scenariosOf } from "./inputs/scenarios.js";
+import { type Noise, noiseDraw } from "./noise/noise.js";
+import { ruleNoise } from "./noise/rule-noise.js";
 import type { GroupForecast } from "./projected-group.js";
 import { rangeWarnings } from "./range-warnings.js";
-import { ruleNoise } from "./rule-noise.js";
-import { type Scenarios, scenariosOf } from "./scenarios.js";
 
 /** Options of `simulate`. */
 export interface SimulateOptions {

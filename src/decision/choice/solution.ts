@@ -1,0 +1,62 @@
+import type { Measure } from "../measure/measure.js";
+import type { StandingOptions } from "../setting/standing.js";
+
+/** An interval for a setting, from what the record leaves uncertain. */
+export interface SettingMargin {
+  readonly lower: number | undefined;
+  readonly upper: number | undefined;
+  /** Share of draws that have no solution near by. */
+  readonly without: number;
+}
+
+/** What a setting is to bring about: a measure that is a value, at most it, or at least it. */
+export type Target = Measure &
+  (
+    | { readonly is: number; readonly atMost?: never; readonly atLeast?: never }
+    | { readonly atMost: number; readonly is?: never; readonly atLeast?: never }
+    | { readonly atLeast: number; readonly is?: never; readonly atMost?: never }
+  );
+
+/** Options of `solveFor`. */
+export interface SolveOptions extends StandingOptions {
+  /** A constant, a first value such as "N[0]", or an input whose usual level is sought. */
+  readonly unknown: string;
+  readonly until: Target;
+  /** Lowest and highest value looked at; default a hundredth to a hundred times the present one, within its bounds. */
+  readonly between?: readonly [number, number];
+  /** The setting comes in multiples of this (0.01 for money, 1 for pieces): rounded to the side that meets the target. */
+  readonly multiple?: number;
+  /** Level of the interval; default 0.95. */
+  readonly level?: number;
+}
+
+/** One setting that meets the target. */
+export interface Solution {
+  /** Rounded to the multiple asked for. */
+  readonly value: number;
+  readonly exact: number;
+  /** The measure at `value`, with its Monte-Carlo error where it is a risk. */
+  readonly achieved: number;
+  readonly achievedError: number;
+  /** Which side of the setting meets an `atMost` or `atLeast`. */
+  readonly meets: "this value only" | "this value and above" | "this value and below";
+  /** From the uncertainty of a fit's constants; absent for a rule, and where the measure is a risk, which carries it. */
+  readonly margin: SettingMargin | undefined;
+}
+
+/** Settings that meet a target. */
+export interface Solved {
+  readonly kind: "solution";
+  readonly unknown: string;
+  readonly unit: string;
+  readonly target: Target;
+  /** The measure in words. */
+  readonly measure: string;
+  readonly between: readonly [number, number];
+  /** By increasing value; empty where nothing in the range meets the target. */
+  readonly solutions: readonly Solution[];
+  /** The nearest miss: a setting, and the measure there. */
+  readonly nearest: { readonly value: number; readonly achieved: number };
+  readonly level: number;
+  readonly sentence: string;
+}

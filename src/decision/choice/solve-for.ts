@@ -1,0 +1,147 @@
+import type { Fit } from "../../estimate/index.js";
+import type { Rule } from "../../rule/index.js";
+import { isRisk, type Measure, measureWords } from "../measure/measure.js";
+import { measureReader } from "../measure/read-measure.js";
+import { type Estimated, riskReader } from "../measure/read-risk.js";
+import { refuseBounds, refuseNoEffect, refuseNoRange, refuseNoTarget } from "../refusals.js";
+import { type Setting, settingOf } from "../setting/set-value.js";
+import { settingMargin } from "../setting/setting-margin.js";
+import { withUnplanned } from "../setting/setting-range.js";
+import { isFit, type Standing, standingOf } from "../setting/standing.js";
+import type { Solution, Solved, SolveOptions, Target } from "./solution.js";
+import { solveSentence } from "./solve-sentence.js";
+import { type Roots, solveWithin } from "./solve-within.js";
+
+/**
+ * Finds what a constant, a first value or the level of an input must be, so that a measure of the projection meets a target.
+ *
+ * The range is looked over for every crossing, so several solutions, and none, are answers. For a fit each solution
+ * has an interval from 400 draws of the constants, each solved anew; a risk carries the constants' uncertainty and
+ * the random change itself.
+ *
+ * @param options.unknown - its unit is that of the constant, state or input.
+ * @throws {ModelError} `no-such-setting` | `no-effect` | `no-range` | `bounds-contradict` | `no-target` |
+ *   `future-input-missing` | `outside-projection` | `unknown-name`.
+ * @example
+ * const loan = recurrence("owed[t+1] = owed*(1 + i) - payment", { fixed: { i: 0.01 } });
+ * const asked = solveFor(loan, { unknown: "payment", constants: { payment: 100 }, initial: { owed: 1000 }, periods: 12,
+ *   until: { level: "owed", at: 12, is: 0 } });
+ * asked.solutions[0].value // 1000*0.01/(1 - 1.01**-12)
+ */
+export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
+  const { unknown, until, level = 0.95 } = options;
+  const aim = until.is ?? until.atMost ?? until.atLeast;
+  if (aim === undefined || !Number.isFinite(aim)) throw refuseNoTarget(aim);
+  const setting = rangeable(subject, options);
+  const standing = standingOf(subject, withUnplanned(subject, options, unknown, setting.between));
+  const found = settingOf(standing, unknown);
+  const reader = readerOf(standing, until, found);
+  const tolerance = options.multiple === undefined ? 0 : 0.01 * options.multiple;
+  const excess = (value: number): number => sidedExcess(until, reader(value).value - aim);
+  const [from, to] = setting.between ?? rangeOf(found);
+  const roots = solveWithin(excess, from, to, {
+    tolerance,
+    edge: until.is === undefined,
+    // A risk takes a whole run at every place.
+    ...(isRisk(until) && { looks: 12 }),
+  });
+  if (roots.flat) throw refuseNoEffect(unknown, measureWords(until, standing));
+  const solutions = roots.roots.map((root) =>
+    solutionAt(standing, found, until, root, reader, excess, options),
+  );
+  const question = {
+    unknown,
+    unit: standing.unitOf(unknown),
+    target: until,
+    measure: measureWords(until, standing),
+    between: [from, to] as const,
+    level,
+  };
+  const answer = { ...question, solutions, nearest: nearestOf(roots, reader) };
+  return Object.freeze({ kind: "solution", ...answer, sentence: solveSentence(answer, standing) });
+}
+
+function rangeable(
+  subject: Fit | Rule,
+  { between, unknown }: SolveOptions,
+): { between?: readonly [number, number] } {
+  if (between === undefined) return {};
+  const [from, to] = between;
+  const own = isFit(subject) ? subject.rule : subject;
+  const bounds = (isFit(subject) ? subject.options.bounds?.[unknown] : undefined) ?? own.bounds[unknown];
+  if (!(from < to)) throw refuseBounds(unknown, from, to, "the first must be the smaller one");
+  if (bounds !== undefined && (to < bounds[0] || from > bounds[1]))
+    throw refuseBounds(unknown, from, to, `the rule admits ${bounds[0]} to ${bounds[1]}`);
+  return { between };
+}
+
+type Reader = (value: number) => Estimated;
+
+function readerOf(standing: Standing, measure: Measure, setting: Setting): Reader {
+  if (isRisk(measure)) {
+    const read = riskReader(standing, measure);
+    return (value) => read(setting, value);
+  }
+  const read = measureReader(standing, measure);
+  return (value) => ({ value: read(setting.at(value)), error: 0 });
+}
+
+/** Above zero where the target is missed; for `is` the plain difference. */
+function sidedExcess(target: Target, difference: number): number {
+  return target.atLeast === undefined ? difference : -difference;
+}
+
+function rangeOf({ name, now, bounds }: Setting): readonly [number, number] {
+  if (now === undefined || now === 0 || !Number.isFinite(now)) {
+    if (bounds.every(Number.isFinite)) return bounds;
+    throw refuseNoRange(name);
+  }
+  const wide = [now / 100, now * 100].sort((a, b) => a - b) as [number, number];
+  return [Math.max(wide[0], bounds[0]), Math.min(wide[1], bounds[1])];
+}
+
+function solutionAt(
+  standing: Standing,
+  setting: Setting,
+  target: Target,
+  root: number,
+  reader: Reader,
+  excess: (value: number) => number,
+  options: SolveOptions,
+): Solution {
+  const step = Math.max(Math.abs(root) * 1e-6, 1e-12, options.multiple ?? 0);
+  const sided = target.is === undefined;
+  const above = sided && excess(root + step) <= 0;
+  const value = onMultiple(root, options.multiple, excess, sided ? above : undefined);
+  const achieved = reader(value);
+  return {
+    value,
+    exact: root,
+    achieved: achieved.value,
+    achievedError: achieved.error,
+    meets: sided ? (above ? "this value and above" : "this value and below") : "this value only",
+    margin: isRisk(target)
+      ? undefined
+      : settingMargin(standing, setting, target, root, options.level ?? 0.95),
+  };
+}
+
+/** The multiple nearest to a root that still meets the target; `above` says on which side those lie. */
+function onMultiple(
+  root: number,
+  multiple: number | undefined,
+  excess: (value: number) => number,
+  above: boolean | undefined,
+): number {
+  if (multiple === undefined) return root;
+  const counted = (count: number): number => Number((count * multiple).toPrecision(15));
+  if (above === undefined) return counted(Math.round(root / multiple));
+  const outward = above ? 1 : -1;
+  let count = above ? Math.floor(root / multiple) : Math.ceil(root / multiple);
+  for (let k = 0; k < 3 && excess(counted(count)) > 0; k++) count += outward;
+  return counted(count);
+}
+
+function nearestOf({ nearest }: Roots, reader: Reader): Solved["nearest"] {
+  return { value: nearest.at, achieved: reader(nearest.at).value };
+}

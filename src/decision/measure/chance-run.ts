@@ -1,0 +1,71 @@
+import { randomStream } from "../../numeric/index.js";
+import {
+  blockStreams,
+  drawnStarts,
+  type EnsembleRun,
+  type Ground,
+  noiseDraw,
+  runEnsemble,
+  type Starts,
+  stateLimits,
+  unknownsDraw,
+} from "../../projection/index.js";
+import type { Setting } from "../setting/set-value.js";
+import type { Standing } from "../setting/standing.js";
+
+/** What listens to a run. */
+export type Listener = Pick<EnsembleRun, "onRow" | "onStep">;
+
+/** Runs all paths at a setting of its own, or as things stand. */
+export type ChanceRun = (listener: Listener, setting?: Setting, value?: number) => void;
+
+/** Whether chance has a part: random change of a rule, or a fit, whose constants are uncertain. */
+export function hasChance({ fit, change }: Standing): boolean {
+  return fit !== undefined || change.some((noise) => noise !== undefined);
+}
+
+/** Runs that all meet the same random numbers, and for a fit the same drawn constants. */
+export function chanceRun(standing: Standing): ChanceRun {
+  const { rule, change, paths, fit } = standing;
+  const source = fit && unknownsDraw(fit, standing.fitGround!.group);
+  const seeds = blockStreams(randomStream(standing.seed), paths);
+  return (listener, setting, value) => {
+    const ground = setting === undefined ? standing.ground : setting.at(value!);
+    const streams = seeds.map((seed) => seed.jump());
+    const drawn =
+      fit === undefined
+        ? sharedStarts(ground, paths)
+        : drawnStarts(fit, standing.fitGround!, source!, paths, streams);
+    runEnsemble({
+      compiled: ground.compiled,
+      states: rule.states.length,
+      width: ground.initial.length,
+      inputs: ground.inputs,
+      from: ground.from,
+      periods: ground.periods,
+      starts: setting === undefined ? drawn : withSetting(drawn, setting, ground),
+      change: change.map((noise) => noise && noiseDraw(noise)),
+      reading: rule.states.map(() => undefined),
+      limits: stateLimits(rule),
+      streams,
+      ...listener,
+    });
+  };
+}
+
+function sharedStarts(ground: Ground, paths: number): Starts {
+  return { paths, size: ground.constants.length, constants: ground.constants, initial: ground.initial };
+}
+
+/** Drawn starts with a setting held: what is set is no longer drawn. */
+function withSetting(starts: Starts, { role, slot }: Setting, ground: Ground): Starts {
+  if (role === "constant") return { ...starts, constants: held(starts.constants, ground.constants, slot) };
+  if (role === "initial") return { ...starts, initial: held(starts.initial, ground.initial, slot) };
+  return starts;
+}
+
+function held(rows: Float64Array, set: Float64Array, slot: number): Float64Array {
+  const copy = rows.slice();
+  for (let at = slot; at < copy.length; at += set.length) copy[at] = set[slot]!;
+  return copy;
+}

@@ -1,0 +1,33 @@
+import type { GroupForecast } from "../../projection/index.js";
+import { refuseNotWatched } from "../refusals.js";
+import { crossing } from "./crossing.js";
+import type { ReachQuestion } from "./reach.js";
+
+/**
+ * First passages of every draw in rows, sorted; infinite for never.
+ *
+ * They are read from the kept paths, those without reading errors where the error is one of observation, or from
+ * what was watched where paths were too many to keep.
+ */
+export function drawnPassages(
+  group: GroupForecast,
+  place: number,
+  question: ReachQuestion,
+  smooth: boolean,
+): Float64Array {
+  const { state, value, direction, margin } = question;
+  const watched = group.passages.find(
+    (each) => each.state === state && each.value === value && each.direction === direction,
+  );
+  const kept = margin === "constants" ? group.draws.mean[place] : group.draws.future[place];
+  if (kept === undefined) {
+    if (watched === undefined) throw refuseNotWatched(state, value, direction);
+    return watched.at.slice().sort();
+  }
+  const length = group.index.length;
+  const curved = smooth && margin === "constants";
+  return Float64Array.from({ length: group.draws.paths }, (_, path) => {
+    const at = crossing(kept, path * length, length, value, direction, curved);
+    return at === undefined ? Number.POSITIVE_INFINITY : at.between;
+  }).sort();
+}

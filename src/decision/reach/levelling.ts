@@ -1,0 +1,24 @@
+import { quantile } from "../../numeric/index.js";
+import type { GroupForecast } from "../../projection/index.js";
+
+/** A path that moves by less than this share of itself in its last period has levelled off. */
+const still = 1e-3;
+
+/** The level to which a path tends by the end of its forecast, with the limits of the draws there. */
+export function levelling(
+  group: GroupForecast,
+  place: number,
+  level: number,
+): { readonly value: number; readonly lower: number; readonly upper: number } | undefined {
+  const { central } = group.states[place]!;
+  const value = central[central.length - 1]!;
+  const before = central[central.length - 2]!;
+  if (!(Math.abs(value - before) <= still * Math.abs(value))) return undefined;
+  const draws = group.draws.mean[place];
+  if (draws === undefined) return { value, lower: value, upper: value };
+  const rows = group.index.length;
+  const ends = Float64Array.from({ length: group.draws.paths }, (_, path) => draws[path * rows + rows - 1]!)
+    .filter(Number.isFinite)
+    .sort();
+  return { value, lower: quantile(ends, (1 - level) / 2), upper: quantile(ends, (1 + level) / 2) };
+}

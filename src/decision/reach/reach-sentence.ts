@@ -1,0 +1,167 @@
+import type { Forecast, Simulation } from "../../projection/index.js";
+import { amount, levelWords, opened, percent, plain, rounded, shareOfDraws } from "../words/amount.js";
+import { conditionWords, groupWords } from "../words/record-words.js";
+import type { AcrossUnits } from "./across-units.js";
+import type { GroupReach, ReachQuestion } from "./reach.js";
+
+type Answer = Omit<GroupReach, "sentence">;
+type Ahead = Forecast | Simulation;
+
+/** The answer for one group: number, unit, interval, what the margin carries, and on what it stands. */
+export function groupSentence(ahead: Ahead, answer: Answer, question: ReachQuestion): string {
+  return `${opened(groupBody(ahead, answer, question))}, provided ${condition(ahead)}.${marginWords(question, answer)}`;
+}
+
+function groupBody(ahead: Ahead, answer: Answer, question: ReachQuestion): string {
+  if (answer.beginsPast) return alreadyThere(ahead, answer, question);
+  if (answer.time === undefined) return notReached(ahead, answer, question);
+  const get = `reaches ${target(question)} ${when(answer, question)}${firstWords(answer)}${neverWords(answer)}`;
+  if (answer.words.recorded === undefined) return `${subject(ahead, answer, question)} ${get}`;
+  return `${subject(ahead, answer, question)} is already recorded at or past ${target(question)}, at ${answer.words.recorded}; by the rule it ${get}`;
+}
+
+/** One sentence for all groups: the first and the last to get there, and when all are there. */
+export function reachSentence(
+  ahead: Ahead,
+  groups: readonly GroupReach[],
+  across: AcrossUnits | undefined,
+  question: ReachQuestion,
+): string {
+  if (groups.length === 1) return groups[0]!.sentence;
+  const body = groups.some((group) => group.scenario !== "")
+    ? byScenario(ahead, groups, question)
+    : byGroup(ahead, groups, question) + newUnit(ahead, across, question);
+  const margin = groups.find((group) => group.time !== undefined);
+  return `${opened(body)}, provided ${condition(ahead)}.${margin === undefined ? "" : marginWords(question, margin)}`;
+}
+
+function byGroup(ahead: Ahead, groups: readonly GroupReach[], question: ReachQuestion): string {
+  const who = (group: GroupReach): string => groupWords(fitOf(ahead), group.group);
+  const there = groups.filter((group) => group.time !== undefined).sort((a, b) => a.time! - b.time!);
+  const [first] = there;
+  const last = there[there.length - 1];
+  const { state } = question;
+  if (first === undefined || last === undefined)
+    return `${state} reaches ${target(question)} in none of ${groups.length} groups by ${groups[0]!.words.horizon}`;
+  const when1 = (group: GroupReach, short: boolean): string =>
+    group.words.recorded === undefined
+      ? when(group, question, short)
+      : `already recorded at ${group.words.recorded}`;
+  const span =
+    first === last
+      ? `${state} reaches ${target(question)} in ${who(first)}, ${when1(first, false)}`
+      : `${state} reaches ${target(question)} first in ${who(first)}, ${when1(first, false)}, and last in ${who(last)}, ${when1(last, first.words.recorded === undefined)}`;
+  const passed = groups.filter((group) => group.beginsPast);
+  const missing = groups.filter((group) => group.time === undefined && !group.beginsPast);
+  if (passed.length > 0) return `${span}; ${passed.map(who).join(" and ")} began past it`;
+  if (missing.length > 0)
+    return `${span}; ${missing.map(who).join(" and ")} ${missing.length === 1 ? "does" : "do"} not get there by ${missing[0]!.words.horizon}`;
+  const latest = there.reduce((late, next) => (next.firstPeriod! > late.firstPeriod! ? next : late));
+  return `${span}; the first period at which all ${groups.length} are at or past it is ${latest.words.firstPeriod}`;
+}
+
+function byScenario(ahead: Ahead, groups: readonly GroupReach[], question: ReachQuestion): string {
+  const each = groups.map((group) => {
+    const who = group.group === "" ? "" : ` (${groupWords(fitOf(ahead), group.group)})`;
+    return `under "${group.scenario}"${who} ${scenarioWords(group, question)}`;
+  });
+  return `${question.state} reaches ${target(question)} ${each.join("; ")}`;
+}
+
+function scenarioWords(group: GroupReach, question: ReachQuestion): string {
+  if (group.beginsPast) return "not at all, as it begins past it";
+  if (group.time === undefined) return `not by ${group.words.horizon}`;
+  return `${when(group, question, true)}${firstWords(group)}`;
+}
+
+function alreadyThere(ahead: Ahead, answer: Answer, question: ReachQuestion): string {
+  const who = subject(ahead, answer, question);
+  if (answer.words.recorded !== undefined)
+    return `${who} is already recorded at or past ${target(question)}, at ${answer.words.recorded}`;
+  const [side, other] = question.direction === "falling" ? ["below", "rising"] : ["above", "falling"];
+  return `${who} is at or ${side} ${target(question)} from the first row on, so there is no time at which it gets there (was direction: "${other}" meant?)`;
+}
+
+function notReached(ahead: Ahead, answer: Answer, question: ReachQuestion): string {
+  const { tendsTo, draws, words, never, neverError } = answer;
+  if (question.margin === "random change" && draws > 1 && never < 1)
+    return `the chance that ${subject(ahead, answer, question)} reaches ${target(question)} by ${words.horizon} is ${percent(1 - never, neverError)} (Monte-Carlo error ${percent(neverError, neverError / 3)}); without random change it does not`;
+  const levels = tendsTo === undefined ? "" : `; the path levels off near ${levelledAt(tendsTo, question)}`;
+  const some =
+    answer.never === 1 || draws === 1
+      ? ""
+      : `; ${shareOfDraws(1 - answer.never, answer.neverError, draws)} it does`;
+  return `${subject(ahead, answer, question)} does not reach ${target(question)} by ${words.horizon}${levels}${some}`;
+}
+
+function levelledAt(tends: NonNullable<Answer["tendsTo"]>, question: ReachQuestion): string {
+  const spread = (tends.upper - tends.lower) / 4;
+  const value = amount(rounded(tends.value, spread), question.unit);
+  if (!(spread > 0)) return value;
+  return `${value} (${levelWords(question.level)} interval ${rounded(tends.lower, spread)} to ${rounded(tends.upper, spread)})`;
+}
+
+function subject(ahead: Ahead, { group, scenario }: Answer, { state }: ReachQuestion): string {
+  const under = scenario === "" ? "" : `Under "${scenario}" `;
+  return group === "" ? `${under}${state}` : `${under}${state} in ${groupWords(fitOf(ahead), group)}`;
+}
+
+function target({ value, unit }: ReachQuestion): string {
+  return amount(plain(value, 12), unit);
+}
+
+/** "at hour 129 (95% interval 125 to 146)". */
+function when({ words, draws }: Answer, { level }: ReachQuestion, short = false): string {
+  const { time, lower, upper, horizon } = words;
+  if (draws === 1) return `${time}`;
+  const name = short ? "" : `${levelWords(level)} interval `;
+  if (lower === undefined) return `${time} (${name}with no limit by ${horizon})`;
+  if (upper === undefined) return `${time} (${name}from ${lower}, with no upper limit by ${horizon})`;
+  return `${time} (${name}${lower} to ${upper})`;
+}
+
+/** The first whole period, where the time lies between two. */
+function firstWords({ time, firstPeriod, words }: Answer): string {
+  if (firstPeriod === undefined || time === firstPeriod) return "";
+  return `; the first period at or past it is ${words.firstPeriod}`;
+}
+
+function neverWords(answer: Answer): string {
+  if (answer.never === 0) return "";
+  const share = shareOfDraws(answer.never, answer.neverError, answer.draws);
+  return `; ${share} it does not get there by ${answer.words.horizon}`;
+}
+
+/** For a new unit, within what the forecast covers. */
+function newUnit(
+  ahead: Ahead,
+  across: AcrossUnits | undefined,
+  { level, periodUnit }: ReachQuestion,
+): string {
+  const fit = fitOf(ahead);
+  if (across === undefined || fit === undefined) return "";
+  const [column = "unit"] = fit.observations.by ?? [];
+  const { time } = ahead.groups[0]!;
+  const [begin, end] = [time[0]!, time[time.length - 1]!];
+  const spread = across.standardDeviation;
+  const lower = across.newLower < begin ? "the start" : `${periodUnit} ${rounded(across.newLower, spread)}`;
+  const upper =
+    across.newUpper > end ? "beyond the forecast" : `${periodUnit} ${rounded(across.newUpper, spread)}`;
+  return `; for a new ${column}, with the scatter between the ${across.count} added, the ${levelWords(level)} interval is ${lower} to ${upper}`;
+}
+
+function condition(ahead: Ahead): string {
+  return conditionWords(ahead.kind === "simulation" ? ahead.rule : ahead.fit.rule, fitOf(ahead));
+}
+
+function marginWords({ margin }: ReachQuestion, { draws, time }: Answer): string {
+  if (draws === 1 || time === undefined) return "";
+  if (margin === "constants")
+    return " The margin is that of the fitted constants, not of a further reading's error.";
+  if (margin === "random change") return " The margin is that of the random change, at the given constants.";
+  return " The margin is that of the fitted constants and of chance from period to period.";
+}
+
+function fitOf(ahead: Ahead): Forecast["fit"] | undefined {
+  return ahead.kind === "forecast" ? ahead.fit : undefined;
+}

@@ -1,0 +1,81 @@
+import type { Direction } from "../../projection/index.js";
+import type { AcrossUnits } from "./across-units.js";
+import type { DeltaMargin } from "./delta-margin.js";
+
+/** The question: when does a state get to a value? */
+export interface ReachOptions {
+  /** Default: the only state. */
+  readonly state?: string;
+  /** In the state's unit. */
+  readonly value: number;
+  readonly direction: Direction;
+  /** Level of the interval; default 0.95. */
+  readonly level?: number;
+  /** Say as well when a new unit would get there, the variance between units added; from three groups on. */
+  readonly newUnit?: boolean;
+}
+
+/** The answer for one group and scenario. Times are in the unit of the period column. */
+export interface GroupReach {
+  readonly group: string;
+  /** "" where there is a single scenario. */
+  readonly scenario: string;
+  /** On the path at the estimates; undefined where it does not get there within the forecast, or begins past it. */
+  readonly time: number | undefined;
+  /** First whole period at or past the value, on the path at the estimates. */
+  readonly firstPeriod: number | undefined;
+  /** Where the record itself shows the value passed: the time of the first such row. */
+  readonly recorded: number | undefined;
+  /** Whether the path begins at or past the value: then there is no time at which it gets there. */
+  readonly beginsPast: boolean;
+  /** Across draws; a limit is undefined where that share of draws never gets there. */
+  readonly lower: number | undefined;
+  readonly upper: number | undefined;
+  /** Half of the draws get there by then; undefined where fewer do. */
+  readonly median: number | undefined;
+  /** For the mean path alone, by the delta method; where errors are those of readings and all is determined. */
+  readonly meanPath: DeltaMargin | undefined;
+  /** Share of draws that never get there within the forecast, and its Monte-Carlo error. */
+  readonly never: number;
+  readonly neverError: number;
+  /** How many draws. */
+  readonly draws: number;
+  /** By period that some draw reaches first: its share of draws, and the share that is there by then. */
+  readonly distribution: readonly { readonly time: number; readonly share: number; readonly by: number }[];
+  /** Where the path no longer moves at the end of the forecast: the level it tends to, with the band of the level. */
+  readonly tendsTo: { readonly value: number; readonly lower: number; readonly upper: number } | undefined;
+  /** Last time the forecast covers. */
+  readonly horizon: number;
+  /** The times in words: with the period's unit, or as dates where the record has them. */
+  readonly words: {
+    readonly time: string | undefined;
+    readonly firstPeriod: string | undefined;
+    readonly lower: string | undefined;
+    readonly upper: string | undefined;
+    readonly recorded: string | undefined;
+    readonly horizon: string;
+  };
+  readonly sentence: string;
+}
+
+/** When a state reaches a value, with its margin. */
+export interface Reach {
+  readonly kind: "reach";
+  /** The rule's text. */
+  readonly rule: string;
+  readonly state: string;
+  readonly unit: string;
+  readonly periodUnit: string;
+  readonly value: number;
+  readonly direction: Direction;
+  readonly level: number;
+  /** What the margin carries. */
+  readonly margin: "constants" | "constants and process errors" | "random change";
+  readonly groups: readonly GroupReach[];
+  /** Where asked for: over the units of the record, their mean, and a new unit. */
+  readonly across: AcrossUnits | undefined;
+  readonly sentence: string;
+}
+
+/** A question with its defaults filled in. */
+export type ReachQuestion = Omit<Reach, "kind" | "groups" | "across" | "sentence">;

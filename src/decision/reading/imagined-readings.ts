@@ -1,0 +1,74 @@
+import type { Fit } from "../../estimate/index.js";
+import { quantile, type RandomStream, randomStream } from "../../numeric/index.js";
+import { centralPath, fittedNoise, type Ground, noiseDraw } from "../../projection/index.js";
+import { drawnGrounds } from "../setting/setting-margin.js";
+import { type Standing, standingOf } from "../setting/standing.js";
+
+/** Constants drawn from a fit, with what each says of readings to come; values on the fitting scale. */
+export interface ImaginedReadings {
+  readonly standing: Standing;
+  readonly grounds: readonly Ground[];
+  /** [draws][rows of the path]: the value that a reading is scattered around. */
+  readonly centres: readonly Float64Array[];
+  /** [rows]: scatter of a reading around it; with errors in the process it grows from the present on. */
+  readonly scatter: Float64Array;
+  /** From the fitting scale to the record's. */
+  readonly logarithm: boolean;
+}
+
+/** What is imagined of a fit. */
+export interface ImagineOptions {
+  readonly periods: number;
+  readonly group?: string;
+  readonly state: number;
+  readonly draws: number;
+  readonly replicates: number;
+  readonly seed: number;
+}
+
+/** Draws constants of a fit and runs each as far as readings may be taken. */
+export function imaginedReadings(fit: Fit, options: ImagineOptions): ImaginedReadings {
+  const { state, draws, replicates, seed, group, periods } = options;
+  const standing = standingOf(fit, { periods, seed, ...(group !== undefined && { group }) });
+  const logarithm = fit.options.spread === "proportional";
+  const scale = (value: number): number => (logarithm ? Math.log(value) : value);
+  const grounds = drawnGrounds(standing, draws);
+  const centres = grounds.map((ground) => Float64Array.from(centralPath(ground).values[state]!, scale));
+  const { reading } = fittedNoise(fit, standing.fitGround!.group);
+  const noise = reading[state];
+  const rows = standing.ground.periods + 1;
+  const alone = noise !== undefined && "sd" in noise ? noise.sd / Math.sqrt(replicates) : undefined;
+  const scatter =
+    alone === undefined
+      ? processScatter(fit, standing, grounds, centres, state, scale, randomStream(seed).jump())
+      : new Float64Array(rows).fill(alone);
+  return { standing, grounds, centres, scatter, logarithm };
+}
+
+/** Scatter of single values around their draw's path, from one noisy run of every draw. */
+function processScatter(
+  fit: Fit,
+  standing: Standing,
+  grounds: readonly Ground[],
+  centres: readonly Float64Array[],
+  state: number,
+  scale: (value: number) => number,
+  stream: RandomStream,
+): Float64Array {
+  const draws = fittedNoise(fit, standing.fitGround!.group).change.map((noise) => noise && noiseDraw(noise));
+  const rows = standing.ground.periods + 1;
+  const offsets = Array.from({ length: rows }, () => new Float64Array(grounds.length));
+  grounds.forEach((ground, k) => {
+    const at = ground.initial.slice();
+    for (let t = 1; t < rows; t++) {
+      ground.compiled.step(at, ground.constants, ground.inputs, ground.from + t - 1, at);
+      for (let s = 0; s < draws.length; s++) at[s] = draws[s]?.(at[s]!, stream) ?? at[s]!;
+      offsets[t]![k] = scale(at[state]!) - centres[k]![t]!;
+    }
+  });
+  // The middle two thirds of the offsets stand for one standard deviation on either side, whatever a few wild paths do.
+  return Float64Array.from(offsets, (column) => {
+    const sorted = column.filter(Number.isFinite).sort();
+    return sorted.length === 0 ? Number.NaN : (quantile(sorted, 0.8413) - quantile(sorted, 0.1587)) / 2;
+  });
+}

@@ -1,0 +1,123 @@
+import { constantsBySlot, type InitialValues, initialVector } from "../../dynamics/index.js";
+import type { Fit } from "../../estimate/index.js";
+import {
+  type FitGround,
+  fitGround,
+  fittedNoise,
+  type Ground,
+  type InputPlans,
+  type Noise,
+  plannedInputs,
+  ruleNoise,
+} from "../../projection/index.js";
+import { compileRule, type ProcessNoise, type Rule } from "../../rule/index.js";
+import type { MeasureUnits } from "../measure/measure.js";
+import { refuseGroup } from "../refusals.js";
+
+/** What a decision is worked out from, beside the rule or fit itself. */
+export interface StandingOptions {
+  /** Whole periods ahead. */
+  readonly periods: number;
+  /** By input: its plan. For a fit the first period ahead comes first, for a rule period 0. */
+  readonly inputs?: InputPlans;
+  /** Of a fit with several groups: which one. */
+  readonly group?: string;
+  /** Of a rule: its constants and first values. */
+  readonly constants?: Readonly<Record<string, number>>;
+  readonly initial?: InitialValues;
+  /** Of a rule: random change by state, for risks. */
+  readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
+  /** Of a rule: what a period is called, and what the present one is numbered; default "period" and 0. */
+  readonly period?: string;
+  readonly startsAt?: number;
+  /** Drawn paths for risks and margins; default 2000. */
+  readonly paths?: number;
+  /** Default 1. */
+  readonly seed?: number;
+}
+
+/** A rule or a fit made ready for questions about its future. */
+export interface Standing extends MeasureUnits {
+  readonly rule: Rule;
+  readonly fit: Fit | undefined;
+  readonly ground: Ground;
+  /** Of a fit. */
+  readonly fitGround: FitGround | undefined;
+  /** Row of the path that is the present; what is ahead begins one row later. */
+  readonly present: number;
+  /** The period column's value at a row. */
+  readonly timeAt: (row: number) => number;
+  readonly change: readonly (Noise | undefined)[];
+  readonly plans: InputPlans;
+  readonly paths: number;
+  readonly seed: number;
+  /** The ground under other plans of inputs. */
+  readonly planned: (plans: InputPlans) => Ground;
+}
+
+/** Whether a subject is a fit. */
+export const isFit = (subject: Fit | Rule): subject is Fit => subject.kind === "fit";
+
+/** Makes a rule or a fit ready. */
+export function standingOf(subject: Fit | Rule, options: StandingOptions): Standing {
+  return isFit(subject) ? fitStanding(subject, options) : ruleStanding(subject, options);
+}
+
+/** "N" of "N[0]"; any other name is its own. */
+export const stateOf = (name: string): string => name.replace(/\[\d+\]$/, "");
+
+function fitStanding(fit: Fit, options: StandingOptions): Standing {
+  const { rule, observations } = fit;
+  const names = fit.groups.map(({ group }) => group);
+  if (options.group === undefined && fit.groups.length > 1) throw refuseGroup(undefined, names);
+  const group = fit.groups.find((each) => each.group === (options.group ?? names[0]));
+  if (group === undefined) throw refuseGroup(options.group, names);
+  const planned = (plans: InputPlans): FitGround => fitGround(fit, group, options.periods, plans);
+  const ground = planned(options.inputs ?? {});
+  const first = ground.recorded.time[0]!;
+  const step = observations.period.step.every;
+  return {
+    rule,
+    fit,
+    ground,
+    fitGround: ground,
+    present: ground.recordEnd - ground.from,
+    timeAt: (row) => first + (ground.from + row) * step,
+    change: fittedNoise(fit, group).change,
+    plans: options.inputs ?? {},
+    paths: options.paths ?? 2000,
+    seed: options.seed ?? 1,
+    planned,
+    unitOf: (name) => {
+      const state = stateOf(name);
+      return observations.states.find((each) => each.name === state)?.unit || (rule.units[state] ?? "");
+    },
+    periodUnit: observations.period.unit,
+  };
+}
+
+function ruleStanding(rule: Rule, options: StandingOptions): Standing {
+  const { periods } = options;
+  const constants = constantsBySlot(rule, options.constants);
+  const initial = initialVector(rule, options.initial);
+  const compiled = compileRule(rule);
+  const planned = (plans: InputPlans): Ground => {
+    const inputs = plannedInputs(rule, plans, { recorded: () => [], rows: 0, last: periods, firstNumber: 0 });
+    return { rule, compiled, constants, initial, inputs, from: 0, periods };
+  };
+  return {
+    rule,
+    fit: undefined,
+    ground: planned(options.inputs ?? {}),
+    fitGround: undefined,
+    present: 0,
+    timeAt: (row) => row + (options.startsAt ?? 0),
+    change: ruleNoise(rule, constants, options.noise),
+    plans: options.inputs ?? {},
+    paths: options.paths ?? 2000,
+    seed: options.seed ?? 1,
+    planned,
+    unitOf: (name) => rule.units[stateOf(name)] ?? "",
+    periodUnit: options.period ?? "period",
+  };
+}

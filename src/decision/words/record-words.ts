@@ -1,0 +1,36 @@
+import type { Fit } from "../../estimate/index.js";
+import type { Rule } from "../../rule/index.js";
+
+/** The record that an answer stands on: "the record of 58 values to hour 240". */
+function recordWords(fit: Fit): string {
+  const { groups, period } = fit.observations;
+  const count = groups.reduce(
+    (sum, group) =>
+      sum + Object.values(group.values).reduce((n, values) => n + values.filter(Number.isFinite).length, 0),
+    0,
+  );
+  const last = Math.max(...groups.map((group) => group.time[group.time.length - 1]!));
+  const label = groups.length === 1 ? groups[0]!.labels?.[groups[0]!.labels.length - 1] : undefined;
+  return `the record of ${count} values to ${label ?? `${period.unit} ${Number(last.toPrecision(6))}`}`;
+}
+
+/** Longest rule that is named in a sentence. */
+const longest = 60;
+
+/** What must hold for an answer: the record's going on, or the rule; and inputs that go as planned. */
+export function conditionWords(rule: Rule, fit: Fit | undefined): string {
+  const planned =
+    rule.inputs.length === 0
+      ? ""
+      : `${rule.inputs.join(" and ")} ${rule.inputs.length === 1 ? "goes" : "go"} as planned and `;
+  const short = rule.text.length <= longest && !rule.text.includes("\n");
+  if (fit !== undefined)
+    return `${planned}it goes on as in ${recordWords(fit)}${short ? `, by the rule ${rule.text}` : ""}`;
+  return `${planned}the rule${short ? ` ${rule.text}` : ""}${rule.constants.length === 0 ? " holds" : " and its constants hold"}`;
+}
+
+/** How a group is named: "flask B", or "N" where there is a single one. */
+export function groupWords(fit: Fit | undefined, group: string): string {
+  const [column] = fit?.observations.by ?? [];
+  return column === undefined || group.startsWith(column) ? group : `${column} ${group}`;
+}

@@ -1,0 +1,32 @@
+import { choleskyFactor, type RandomStream } from "../../numeric/index.js";
+import { gammaDraw } from "../noise/gamma-draw.js";
+
+/** Draws unknowns of a fit around their estimates; writes into `out`. */
+export type ConstantsDraw = (stream: RandomStream, out: Float64Array) => void;
+
+/**
+ * A multivariate t around the estimates: normal by the covariance, widened by the uncertainty of sigma^2.
+ *
+ * @param covariance - [size, size] row-major, by sigma^2 = RSS/(n - p).
+ * @returns undefined where the covariance is not positive definite.
+ */
+export function constantsDraw(
+  estimates: Float64Array,
+  covariance: Float64Array,
+  degreesOfFreedom: number,
+): ConstantsDraw | undefined {
+  const size = estimates.length;
+  const factor = choleskyFactor(covariance, size);
+  if (factor === undefined) return undefined;
+  const normals = new Float64Array(size);
+  return (stream, out) => {
+    for (let i = 0; i < size; i++) normals[i] = stream.normal();
+    const half = 0.5 * degreesOfFreedom;
+    const widen = Math.sqrt(half / gammaDraw(half, stream));
+    for (let i = 0; i < size; i++) {
+      let sum = 0;
+      for (let k = 0; k <= i; k++) sum += factor[i * size + k]! * normals[k]!;
+      out[i] = estimates[i]! + widen * sum;
+    }
+  };
+}
