@@ -1,5 +1,4 @@
 import type { RandomStream } from "../../numeric/index.js";
-import type { Rule } from "../../rule/index.js";
 import type { Readings } from "../rows/readings.js";
 import type { Dynamics } from "./kalman-step.js";
 
@@ -14,7 +13,6 @@ interface Cloud {
 
 /** What particles need to know of a state-space model at its estimates. */
 export interface ParticleModel {
-  readonly rule: Rule;
   readonly dynamics: Dynamics;
   readonly constants: Float64Array;
   readonly readings: Readings;

@@ -93,7 +93,13 @@ export function stateSpace(
     particleModel(at) {
       setDown(at);
       const sds = rule.states.map((_, s) => Math.sqrt(readingVariance(s)));
-      return { rule, dynamics, constants, readings, processSd: variance.map(Math.sqrt), readingSd: sds };
+      return {
+        dynamics,
+        constants,
+        readings,
+        processSd: variance.map(Math.sqrt),
+        readingSd: sds,
+      };
     },
     longRunSd(at) {
       setDown(at);
