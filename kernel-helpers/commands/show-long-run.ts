@@ -22,6 +22,7 @@ const verdictColumns: readonly Column[] = [
 ];
 
 const searched = {
+  "all-values": "Every value stays as it is.",
   every: "None in the range searched can be missing.",
   "many-starts": "Found from many starts; for a system this does not prove that there is no other.",
   "cut-short": "The search was cut short; there may be more. Narrow the range.",

@@ -33,11 +33,20 @@ function middleOf([low, high]: Interval): number {
   return Math.sign(even) * (near === 0 ? far * 1e-3 : Math.sqrt(near) * Math.sqrt(far));
 }
 
+/** Bounds from the value in the middle and the slope: closer than direct ones on short pieces. */
+function centered(enclose: Problem["enclose"], [low, high]: Interval, slope: Interval): Interval {
+  const middle = low + (high - low) / 2;
+  const reach = Math.max(high - middle, middle - low) * Math.max(Math.abs(slope[0]), Math.abs(slope[1]));
+  const { value } = enclose([middle, middle]);
+  const room = reach * (1 + 1e-12) + noise(middle);
+  return Number.isFinite(room) && !Number.isNaN(value[0]) ? [value[0] - room, value[1] + room] : [-1, 1];
+}
+
 type Judgement = "empty" | "one-crossing" | "undecided" | "divide";
 
 function judge({ of, enclose }: Problem, piece: Interval, scale: number): Judgement {
   const { value, slope } = enclose(piece);
-  if (!hasZero(value)) return "empty";
+  if (!hasZero(value) || !hasZero(centered(enclose, piece, slope))) return "empty";
   if (Number.isNaN(slope[0]) || hasZero(slope)) return narrow(piece, scale) ? "undecided" : "divide";
   return Math.sign(of(piece[0])) * Math.sign(of(piece[1])) <= 0 ? "one-crossing" : "empty";
 }
@@ -107,8 +116,9 @@ function decide(problem: Problem, piece: Interval): number | undefined {
     // A jump changes sign too, without passing zero.
     return Math.abs(of(at)) <= 1e-6 * Math.abs(at) ? at : undefined;
   }
-  const at = levelPlace(problem, piece);
-  return Math.abs(of(at)) <= noise(at) ? at : undefined;
+  // A jump may land on zero without a change of sign; jumps mostly stand at numbers that print short.
+  const places = [levelPlace(problem, piece), Number(((low + high) / 2).toPrecision(9))];
+  return places.find((at) => Math.abs(of(at)) <= noise(at));
 }
 
 function rootIn(of: (x: number) => number, [low, high]: Interval): number {

@@ -28,10 +28,11 @@ export interface Equilibria {
   readonly within: Readonly<Record<string, Interval>>;
   readonly points: readonly Equilibrium[];
   /**
-   * `every` = one state: the range was covered and none can be missing; `many-starts` = a system: none may be
+   * `every` = one state: the range was covered and none can be missing; `all-values` = one state: whatever the
+   * value, it stays, so none is listed; `many-starts` = a system: none may be
    * missing, but none is proven to be; `cut-short` = the search ran out of patience.
    */
-  readonly search: "every" | "many-starts" | "cut-short";
+  readonly search: "every" | "all-values" | "many-starts" | "cut-short";
   /** Starts used, for a system. */
   readonly starts: number;
 }
@@ -65,7 +66,19 @@ function described(held: HeldStep, present: ArrayLike<number>): Equilibrium {
   });
 }
 
-function ofOneState(held: HeldStep, within: Interval): { points: Float64Array[]; complete: boolean } {
+type Found = { readonly points: readonly Float64Array[]; readonly search: Equilibria["search"] };
+
+/** Whether every value stays as it is, judged at places spread over the range. */
+function allStay(held: HeldStep, within: Interval): boolean {
+  const next = new Float64Array(held.width);
+  return spreadPoints([within], 50).every((place) => {
+    held.step(settled(held.rule, place), next);
+    return next[0] === place[0];
+  });
+}
+
+function ofOneState(held: HeldStep, within: Interval): Found {
+  if (allStay(held, within)) return { points: [], search: "all-values" };
   const enclosure = encloseStep(held.rule, held);
   const next = new Float64Array(held.width);
   const { roots, complete } = enclosedRoots({
@@ -79,20 +92,21 @@ function ofOneState(held: HeldStep, within: Interval): { points: Float64Array[];
     },
     within,
   });
-  return { points: roots.map((at) => Float64Array.of(at)), complete };
+  const points = roots.map((at) => Float64Array.of(at));
+  return { points, search: complete ? "every" : "cut-short" };
 }
 
 const apart = (a: Float64Array, b: Float64Array): boolean =>
   a.some((value, i) => Math.abs(value - b[i]!) > 1e-8 * Math.max(Math.abs(value), Math.abs(b[i]!), 1e-12));
 
-function ofSystem(held: HeldStep, within: readonly Interval[], starts: number): readonly Float64Array[] {
+function ofSystem(held: HeldStep, within: readonly Interval[], starts: number): Found {
   const found: Float64Array[] = [];
   for (const start of spreadPoints(within, starts)) {
     const point = settleByNewton(held, start);
     const inside = point?.every((value, i) => value >= within[i]![0] && value <= within[i]![1]);
     if (point !== undefined && inside && found.every((other) => apart(point, other))) found.push(point);
   }
-  return found.sort((a, b) => a[0]! - b[0]! || a[1]! - b[1]!);
+  return { points: found.sort((a, b) => a[0]! - b[0]! || a[1]! - b[1]!), search: "many-starts" };
 }
 
 /**
@@ -111,17 +125,14 @@ export function equilibria(rule: Rule, options: EquilibriaOptions = {}): Equilib
   const ranges = searchRanges(rule, held.constants, options.within);
   const single = rule.states.length === 1;
   const starts = single ? 0 : (options.starts ?? 400);
-  const found = single
-    ? ofOneState(held, ranges[0]!)
-    : { points: ofSystem(held, ranges, starts), complete: true };
-  const search = single ? "every" : "many-starts";
+  const found = single ? ofOneState(held, ranges[0]!) : ofSystem(held, ranges, starts);
   return Object.freeze({
     kind: "equilibria",
     rule,
     constants: Object.freeze(Object.fromEntries(rule.constants.map((name, i) => [name, held.constants[i]!]))),
     within: Object.freeze(Object.fromEntries(rule.states.map((name, i) => [name, ranges[i]!]))),
     points: Object.freeze(found.points.map((point) => described(held, point))),
-    search: found.complete ? search : "cut-short",
+    search: found.search,
     starts,
   });
 }

@@ -1,4 +1,6 @@
-import { type Interval, plus } from "./graph/interval.js";
+import type { Algebra } from "./graph/evaluate-over.js";
+import { everywhere, type Interval, minus, plus, times } from "./graph/interval.js";
+import type { Operator } from "./graph/node.js";
 import type { Rule } from "./rule.js";
 import { intervalAlgebra, type PlaceOver, stepOver } from "./step-over.js";
 
@@ -16,24 +18,61 @@ export interface HeldValues {
 
 const exactly = (value: number): Interval => [value, value];
 
+/** Operations at which a value may jump, and whether an interval of results shows that it does there. */
+const jumping: readonly Operator[] = ["floor", "ceil", "round", "sign", "mod", "choose"];
+
+/** Intervals that note when a jump may lie inside: there no slope bounds the change of the value. */
+function jumpNotingAlgebra(note: () => void): Algebra<Interval> {
+  const noted = (operator: Operator): Algebra<Interval>["operations"][Operator] => {
+    const plain = intervalAlgebra.operations[operator];
+    const whole = operator === "floor" || operator === "ceil" || operator === "sign";
+    return (a, b, c) => {
+      const result = plain(a, b, c);
+      const undecided = operator === "choose" ? a[0] !== a[1] : a[0] !== a[1] && !whole;
+      if (undecided || (whole && result[1] - result[0] > 0.5)) note();
+      return result;
+    };
+  };
+  const operations = { ...intervalAlgebra.operations };
+  for (const operator of jumping) operations[operator] = noted(operator);
+  return { ...intervalAlgebra, operations };
+}
+
+const meet = (a: Interval, b: Interval): Interval => [Math.max(a[0], b[0]), Math.min(a[1], b[1])];
+
 /**
  * For a rule of one state: a function that encloses the next value and its slope over an interval, past values
  * being the same as the present one. Every value that the step takes on the interval lies within `value`, and
- * every slope within `slope`.
+ * every slope within `slope`, which is without bounds where the value may jump. The value is bounded both directly
+ * and from the middle by the slope, which is closer on short intervals.
  */
 export function encloseStep(rule: Rule, held: HeldValues): (present: Interval) => StepEnclosure {
-  const step = stepOver(rule, intervalAlgebra);
+  let jumps = false;
+  const step = stepOver(
+    rule,
+    jumpNotingAlgebra(() => {
+      jumps = true;
+    }),
+  );
   const width = 1 + rule.memory.length;
   const constants = Array.from(held.constants, exactly);
   const inputs = Array.from(held.inputs, exactly);
+  const placeOf = (present: Interval): PlaceOver<Interval> => ({
+    state: new Array<Interval>(width).fill(present),
+    constants,
+    input: (slot) => inputs[slot]!,
+    t: [Number.NaN, Number.NaN],
+  });
   return (present) => {
-    const state = new Array<Interval>(width).fill(present);
-    const place: PlaceOver<Interval> = {
-      state,
-      constants,
-      input: (slot) => inputs[slot]!,
-      t: [Number.NaN, Number.NaN],
-    };
-    return { value: step.next(place)[0]!, slope: step.slopes(place)[0]!.reduce(plus) };
+    jumps = false;
+    const place = placeOf(present);
+    const value = step.next(place)[0]!;
+    const slope = step.slopes(place)[0]!.reduce(plus);
+    if (jumps) return { value, slope: everywhere };
+    const middle = present[0] + (present[1] - present[0]) / 2;
+    const center = step.next(placeOf(exactly(middle)))[0]!;
+    const centered = plus(center, times(slope, minus(present, exactly(middle))));
+    const usable = Number.isFinite(centered[0]) && Number.isFinite(centered[1]) && !Number.isNaN(value[0]);
+    return { value: usable ? meet(value, centered) : value, slope };
   };
 }

@@ -35,3 +35,20 @@ test("a host and its parasitoid rest at one place besides zero, which is unstabl
   expect(points[1]!.multipliers[0]!.modulus).toBeCloseTo(1.17741002, 8);
   expect(points[1]!.approach).toBe("turning");
 });
+
+test("jumps hide no rest level: where the step lands on it, and where it crosses", () => {
+  // floor(N/2) + 3 = N at 5 (inside a step of the floor) and at 6 (where it jumps); worked out by hand.
+  const { points, search } = equilibria(recurrence("N[t+1] = floor(N/2) + 3"));
+  expect(search).toBe("every");
+  expect(points.map(({ at }) => at["N"])).toEqual([5, 6]);
+});
+
+test("a jump over the line of no change is no rest level", () => {
+  expect(equilibria(recurrence("N[t+1] = if(N < 2, 3, 1)"), { within: [-10, 10] }).points).toEqual([]);
+});
+
+test("where every value stays none is listed, and where none stays none is found", () => {
+  expect(equilibria(recurrence("x[t+1] = R*x"), { constants: { R: 1 } }).search).toBe("all-values");
+  const moving = equilibria(recurrence("x[t+1] = x + c"), { constants: { c: 1 } });
+  expect([moving.points.length, moving.search]).toEqual([0, "every"]);
+});

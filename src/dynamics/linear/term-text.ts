@@ -16,6 +16,19 @@ function numberText(value: number): string {
 
 const grouped = (text: string): string => (/[-/ ]/u.test(text) ? `(${text})` : text);
 
+/** What a pair of complex roots adds up to: a cosine and a sine, a vanishing one left out. */
+function waveText(root: ClosedTerm["root"], { re, im }: ClosedTerm["coefficient"]): string {
+  const angle = numberText(Math.atan2(root.im, root.re));
+  const waves = [
+    [2 * re, "cos"],
+    [-2 * im, "sin"],
+  ] as const;
+  const parts = waves
+    .filter(([amount]) => Math.abs(amount) > 1e-14 * Math.hypot(re, im))
+    .map(([amount, wave]) => `${grouped(numberText(amount))}*${wave}(${angle}*t)`);
+  return parts.length === 1 ? parts[0]! : `(${parts.join(" + ")})`;
+}
+
 /** Text of one term in the rule language; of a complex pair, the one above the real line stands for both. */
 function termText({ root, power, coefficient }: ClosedTerm): string {
   if (root.modulus === 0) return `if(t == ${power}, ${numberText(coefficient.re)}, 0)`;
@@ -26,9 +39,8 @@ function termText({ root, power, coefficient }: ClosedTerm): string {
     const parts = [numberText(coefficient.re), ...count, ...grows];
     return (parts.length > 1 && parts[0] === "1" ? parts.slice(1) : parts.map(grouped)).join("*");
   }
-  const angle = numberText(Math.atan2(root.im, root.re));
-  const wave = `(${numberText(2 * coefficient.re)}*cos(${angle}*t) + ${grouped(numberText(-2 * coefficient.im))}*sin(${angle}*t))`;
-  return [...count, `${grouped(numberText(root.modulus))}^t`, wave].join("*");
+  const size = numberText(root.modulus);
+  return [...count, ...(size === "1" ? [] : [`${grouped(size)}^t`]), waveText(root, coefficient)].join("*");
 }
 
 /** A closed form as text of the rule language, to ten digits. */

@@ -72,10 +72,11 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
       option: "noise",
       what: "state",
       names: states,
-      wanted: () => '{ kind: "additive" | "lognormal", sd: number or constant }',
+      wanted: () => '{ kind: "additive" | "lognormal", sd: a number or the name of a constant of the rule }',
       fits: (value: { kind?: unknown; sd?: unknown } | null) =>
         (value?.kind === "additive" || value?.kind === "lognormal") &&
-        (typeof value.sd === "string" || (isNumber(value.sd) && (value.sd as number) >= 0)),
+        ((typeof value.sd === "string" && constants.includes(value.sd)) ||
+          (isNumber(value.sd) && (value.sd as number) >= 0)),
     },
   ];
 }
