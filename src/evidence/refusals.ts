@@ -80,3 +80,13 @@ export function refuseNothingFits(reason: string): ModelError {
     { reason },
   );
 }
+
+export function refuseExactFit(rule: string, group: string): ModelError {
+  const who = group === "" ? "the record" : `the record of "${group}"`;
+  return new ModelError(
+    "exact-fit",
+    `"${rule}" reproduces ${who} exactly, so there is no scatter to judge it by. Where values are exact but for rounding, ` +
+      "count the rows that a rule reproduces; where they should scatter, look whether the column was computed.",
+    { rule, group },
+  );
+}

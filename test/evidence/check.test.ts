@@ -50,6 +50,13 @@ describe("check", () => {
     );
   });
 
+  test("refuses a rule that reproduces the record exactly", () => {
+    const exact = fit(recurrence("N[t+1] = N + c"), series([10, 12, 14, 16, 18, 20]), { errors: "process" });
+    expect(() => check(exact)).toThrowErrorMatchingInlineSnapshot(
+      `[ModelError: "N[t+1] = N + c" reproduces the record exactly, so there is no scatter to judge it by. Where values are exact but for rounding, count the rows that a rule reproduces; where they should scatter, look whether the column was computed.]`,
+    );
+  });
+
   test("refuses fewer than fifty refits", () => {
     const fitted = fit(sheltered, culture, { errors: "observation", spread: "proportional" });
     expect(() => check(fitted, { refits: 10 })).toThrowErrorMatchingInlineSnapshot(

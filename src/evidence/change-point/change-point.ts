@@ -3,6 +3,7 @@ import { type RandomStream, randomStream } from "../../numeric/index.js";
 import type { Observations } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
 import { type Refitter, refitter } from "../refit/refitter.js";
+import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseNoDates } from "../refusals.js";
 import { type BreakDate, breakScan } from "./break-scan.js";
 import { breakSentence } from "./break-sentence.js";
@@ -65,7 +66,7 @@ export interface ChangePoint {
  * far too many), and the interval holds the dates whose likelihood lies within its cut of the best one.
  *
  * @returns per group the date, its interval and both sets of constants, whether or not a break is found.
- * @throws {ModelError} `too-short-for-a-break` and those of `fit`.
+ * @throws {ModelError} `too-short-for-a-break` | `exact-fit` and those of `fit`.
  * @see Andrews, D. W. K. (1993), Tests for parameter instability and structural change with unknown change point,
  *   Econometrica 61; Diebold, F. X. and Chen, C. (1996), Testing structural stability with endogenous breakpoint, Journal
  *   of Econometrics 70: its distribution in short dynamic records, by drawing them; Eo, Y. and
@@ -81,6 +82,7 @@ export function changePoint(
   const { leastShare = 0.15, draws = 399, seed = 1, ...others } = options;
   const level = options.level ?? 0.95;
   const fit = fitRule(rule, observations, { ...others, errors: "process", intervals: "none" });
+  refuseExact(fit);
   let stream = randomStream(seed);
   const groups = fit.groups.map((group) => {
     const own = stream;

@@ -1,5 +1,6 @@
 import type { Fit, GroupFit } from "../../estimate/index.js";
 import { type RandomStream, randomStream } from "../../numeric/index.js";
+import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseFewRefits } from "../refusals.js";
 import { type ErrorAdvice, errorAdvice } from "./error-advice.js";
 import { type LackOfFit, lackOfFit } from "./lack-of-fit.js";
@@ -51,13 +52,14 @@ const adviceDraws = 60;
  * intervals that hold the truth), and whether the scatter lies in the reading or in the change.
  *
  * @returns per group the single checks, and what they come to in words.
- * @throws {ModelError} `refits-too-few`.
+ * @throws {ModelError} `refits-too-few` | `exact-fit`.
  * @example check(fit(crowding, counts, { errors: "observation" })).sentence;
  */
 export function check(fit: Fit, options: CheckOptions = {}): Check {
   const settings = { refits: options.refits ?? 200, seed: options.seed ?? 1 };
   if (!Number.isInteger(settings.refits) || settings.refits < leastRefits)
     throw refuseFewRefits(settings.refits, leastRefits);
+  refuseExact(fit);
   let stream = randomStream(settings.seed);
   const groups = fit.groups.map((group) => {
     const own = stream;

@@ -47,7 +47,8 @@ export interface Comparison {
  * differ, fits on the log scale are brought to the record's own scale by the Jacobian, -sum ln(y). With `decide`, what
  * every rule that stands leads to is told, and none is called best.
  *
- * @throws {ModelError} `too-few-fits` | `unlike-records` | `unlike-errors` | `unlike-starts`.
+ * @throws {ModelError} `too-few-fits` | `unlike-records` | `unlike-errors` | `unlike-starts` |
+ *   `exact-fit`.
  * @see Burnham, K. P. and Anderson, D. R. (2002), Model Selection and Multimodel Inference, sections 2.4, 2.6, 2.9.
  * @example compare([crowdingFit, shelteredFit]).verdict.kind; // "supported"
  */
@@ -55,6 +56,7 @@ export function compare(fits: readonly Fit[], options: CompareOptions = {}): Com
   const [first] = fits;
   if (!first || fits.length < 2) throw refuseOneFit(fits.length);
   for (const other of fits.slice(1)) refuseUnlike(first, other);
+  for (const fit of fits) refuseExact(fit);
   const scalesDiffer = new Set(fits.map((fit) => fit.options.spread ?? "constant")).size > 1;
   const rows = comparisonRows(fits, scalesDiffer);
   const rolled = rollingOrigin(fits, planOf(first, options));

@@ -3,6 +3,7 @@ import { fit as fitRule } from "../../estimate/index.js";
 import { randomStream } from "../../numeric/index.js";
 import type { Observations } from "../../record/index.js";
 import { type ErrorAdvice, errorAdvice } from "../check/error-advice.js";
+import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseNothingFits } from "../refusals.js";
 import { candidatesFor, type NotTried } from "./candidates.js";
 import { holdOut } from "./hold-out.js";
@@ -70,7 +71,7 @@ export interface Proposal {
  * are no evidence, and a supported rule must not forecast the last fifth of the record, which it was not fitted to,
  * clearly worse than a naive forecast.
  *
- * @throws {ModelError} `several-states` | `nothing-fits`.
+ * @throws {ModelError} `several-states` | `nothing-fits` | `exact-fit`.
  * @example propose(counts, { spread: "proportional" }).verdict.kind; // "undecided"
  */
 export function propose(observations: Observations, options: ProposeOptions = {}): Proposal {
@@ -86,6 +87,7 @@ export function propose(observations: Observations, options: ProposeOptions = {}
   const settings = { ...others, spread };
   const { tried, failed } = tryRules(usable, record, kinds, settings);
   if (tried.length === 0) throw refuseNothingFits(failed[0]?.reason ?? "no rule suits its levels");
+  for (const { fit } of tried) refuseExact(fit);
   const barred = candidates.filter((candidate) => !usable.includes(candidate));
   const notTried = [
     ...barred.map(({ name }) => ({ name, reason: "speaks of positive levels only" })),
