@@ -1,6 +1,7 @@
 import { mkdirSync, readFileSync, renameSync, writeFileSync } from "node:fs";
 import Module, { createRequire } from "node:module";
 import { dirname, join } from "node:path";
+import { setFlagsFromString } from "node:v8";
 import { Script } from "node:vm";
 import type ts from "typescript-cell";
 import { cacheFolder } from "./cache-folder.js";
@@ -24,6 +25,9 @@ export interface CompilerLibrary {
  * it is eight megabytes, and reading them anew is a third of the time until the first cell can run.
  */
 export function compilerLibrary(): CompilerLibrary {
+  // Every cell leaves a whole program of the compiler behind. By itself Node would let the heap double before it
+  // tidies up old things. Set before the code is read, because kept code is bound to Node's settings.
+  setFlagsFromString("--heap-growing-percent=20");
   // Beyond ASCII it has characters only in comments (a test looks), and read so it takes half the memory.
   const text = readFileSync(compilerPath, "latin1");
   const kept = join(cacheFolder(), `compiler-${process.version}-${process.arch}-${text.length}.bin`);
