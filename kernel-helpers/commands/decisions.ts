@@ -26,7 +26,7 @@ import { shownTogether } from "./shown-together.js";
 export function reaches(ahead: Forecast | Simulation, options: ReachOptions): Reach {
   const found = reachesValue(ahead, options);
   caseLog.noteStep(`asked when ${found.state} reaches ${found.value} ${found.unit}, ${found.direction}`);
-  return showing({ ...found }, () => shownTogether(showReach(found)));
+  return showing({ ...found }, () => shownTogether(showReach(found, ahead)));
 }
 
 /**

@@ -5,17 +5,23 @@ import {
   type Reach,
   type Solved,
 } from "../../src/decision/index.js";
+import type { Forecast, Simulation } from "../../src/projection/index.js";
 import { type Figure, figure } from "../figures/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
 import { ruleTitle } from "./rule-title.js";
-import { projectedName } from "./show-forecast.js";
+import { decidingFan, projectedName } from "./show-forecast.js";
 
 const percent = (level: number): string => `${Number((100 * level).toPrecision(12))}%`;
 
 /** The answer to "when": a table of groups, and the distribution over periods where chance has a part. */
-export function showReach(found: Reach): readonly (Table | Figure)[] {
+export function showReach(found: Reach, ahead: Forecast | Simulation): readonly (Table | Figure)[] {
   const figures = found.groups.some((group) => group.distribution.length > 1) ? [reachFigure(found)] : [];
-  return [reachTable(found), ...figures];
+  const name = `the level ${amountWords(found)}`;
+  const fans =
+    ahead.kind === "forecast"
+      ? [decidingFan(ahead, found.state, { value: found.value, name }, eventWords(found))]
+      : [];
+  return [reachTable(found), ...fans, ...figures];
 }
 
 function reachTable(found: Reach): Table {
@@ -51,6 +57,17 @@ function reachTable(found: Reach): Table {
       { key: "upper", label: "to", ...of },
     ];
   }
+}
+
+/** "A: there by hour 372 in 99.0% of draws (Monte-Carlo error 0.2%)". */
+function eventWords(found: Reach): string {
+  const each = found.groups.map((group) => {
+    const name = projectedName(group);
+    const share = `${(100 * (1 - group.never)).toFixed(1)}% of draws (Monte-Carlo error ${(100 * group.neverError).toFixed(1)}%)`;
+    return `${name === "" ? "" : `${name}: `}there by ${group.words.horizon} in ${share}`;
+  });
+  const [first = "", ...rest] = each;
+  return [first.charAt(0).toUpperCase() + first.slice(1), ...rest].join("; ");
 }
 
 const never: readonly Column[] = [

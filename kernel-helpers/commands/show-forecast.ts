@@ -1,5 +1,5 @@
 import type { Forecast, GroupForecast } from "../../src/projection/index.js";
-import { type Figure, fanFigure, type ProjectedSeries } from "../figures/index.js";
+import { type FanFigureOptions, type Figure, fanFigure, type ProjectedSeries } from "../figures/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
 
@@ -21,16 +21,34 @@ export function projectedName({
 }
 
 function fanCharts(ahead: Forecast): Figure[] {
-  const { observations, rule } = ahead.fit;
-  return rule.states.map((state) =>
-    fanFigure({
-      title: `Forecast of ${rule.text}`,
-      x: { title: observations.period.column, unit: observations.period.unit },
-      y: { title: state, unit: observations.states.find((each) => each.name === state)?.unit ?? "" },
-      series: ahead.groups.map((group) => projected(ahead, group, state)),
-      notes: notesOf(ahead),
-    }),
+  return ahead.fit.rule.states.map((state) =>
+    fanFigure({ ...fanOf(ahead, state), title: `Forecast of ${ahead.fit.rule.text}` }),
   );
+}
+
+/** The fan of a state with the level that decides, and what the sentence says of it. */
+export function decidingFan(
+  ahead: Forecast,
+  state: string,
+  threshold: { readonly value: number; readonly name: string },
+  event: string,
+): Figure {
+  return fanFigure({
+    ...fanOf(ahead, state),
+    title: `Forecast of ${state}, and ${threshold.name}`,
+    threshold,
+    event,
+  });
+}
+
+function fanOf(ahead: Forecast, state: string): Omit<FanFigureOptions, "title"> {
+  const { observations } = ahead.fit;
+  return {
+    x: { title: observations.period.column, unit: observations.period.unit },
+    y: { title: state, unit: observations.states.find((each) => each.name === state)?.unit ?? "" },
+    series: ahead.groups.map((group) => projected(ahead, group, state)),
+    notes: notesOf(ahead),
+  };
 }
 
 function projected(ahead: Forecast, group: GroupForecast, name: string): ProjectedSeries {
