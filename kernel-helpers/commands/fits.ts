@@ -101,13 +101,21 @@ function observedAndFitted(fitted: Fit): Figure[] {
   );
 }
 
+/** Whether a profile is one of a sum of squares. */
+function bySquares({ options }: Fit, { estimates: all }: GroupFit): boolean {
+  const counts = options.spread === "poisson" || options.spread === "negative-binomial";
+  return !counts && all.every(({ role }) => role !== "spread");
+}
+
 /** Profiles of every constant; of one group, because a figure of many profiles is read by nobody. */
 function profiles(fitted: Fit): Figure | undefined {
   const [group] = fitted.groups;
   if (group === undefined || fitted.groups.length > 1) return undefined;
   return profileFigure({
     title: "Profiles of the constants",
-    measure: "Rise of the sum of squares / sigma²",
+    measure: bySquares(fitted, group)
+      ? "Rise of the sum of squares / sigma²"
+      : "Twice the fall of the log-likelihood",
     cut: group.cut,
     level: `${100 * (fitted.options.level ?? 0.95)}%`,
     profiles: group.estimates.map(({ name, unit, value, profile, trace }) => ({
