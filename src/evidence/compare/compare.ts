@@ -1,5 +1,6 @@
 import type { Fit } from "../../estimate/index.js";
 import { type RollingOrigin, rollingOrigin } from "../forecasts/rolling-origin.js";
+import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseOneFit, refuseUnlikeErrors, refuseUnlikeRecords, refuseUnlikeStarts } from "../refusals.js";
 import { type ComparisonRow, comparisonRows } from "./comparison-row.js";
 import { type ComparisonVerdict, comparisonVerdict } from "./comparison-verdict.js";
