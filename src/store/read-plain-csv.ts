@@ -27,6 +27,9 @@ export async function readPlainCsv({
 /** A whole number past 2^53 may have lost digits on the way. */
 function isAltered(column: Column): boolean {
   if (!(column instanceof Float64Array)) return false;
-  for (const value of column) if (Math.abs(value) >= Number.MAX_SAFE_INTEGER) return true;
+  for (let row = 0; row < column.length; row++) {
+    const value = column[row]!;
+    if (value >= Number.MAX_SAFE_INTEGER || value <= -Number.MAX_SAFE_INTEGER) return true;
+  }
   return false;
 }

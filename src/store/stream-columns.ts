@@ -1,4 +1,4 @@
-import type { DuckDBConnection, DuckDBDataChunk } from "@duckdb/node-api";
+import type { DuckDBConnection, DuckDBDataChunk, DuckDBVector } from "@duckdb/node-api";
 import type { Column } from "../record/index.js";
 import { addTexts } from "./text-vector.js";
 
@@ -29,24 +29,32 @@ interface Gathered {
 }
 
 function numbers(): Gathered {
-  let values = new Float64Array(4096);
+  const pieces: Float64Array[] = [];
   let count = 0;
   return {
     add(chunk, at, rows) {
-      if (count + rows > values.length) {
-        const larger = new Float64Array(Math.max(2 * values.length, count + rows));
-        larger.set(values.subarray(0, count));
-        values = larger;
-      }
-      const vector = chunk.getColumnVector(at);
-      // Not in the package's types: present in the pinned version, and done without where it is not.
-      const { items } = vector as unknown as { items?: unknown };
-      if (items instanceof Float64Array) values.set(items.subarray(0, rows), count);
-      else for (let row = 0; row < rows; row++) values[count + row] = vector.getItem(row) as number;
+      pieces.push(numbersOf(chunk.getColumnVector(at), rows));
       count += rows;
     },
-    column: () => values.slice(0, count),
+    column() {
+      const values = new Float64Array(count);
+      let from = 0;
+      for (const piece of pieces) {
+        values.set(piece, from);
+        from += piece.length;
+      }
+      return values;
+    },
   };
+}
+
+function numbersOf(vector: DuckDBVector, rows: number): Float64Array {
+  // Not in the package's types: present in the pinned version, and done without where it is not.
+  const { items } = vector as unknown as { items?: unknown };
+  if (items instanceof Float64Array) return items.slice(0, rows);
+  const values = new Float64Array(rows);
+  for (let row = 0; row < rows; row++) values[row] = vector.getItem(row) as number;
+  return values;
 }
 
 function cells(kind: "boolean" | "text"): Gathered {
