@@ -48,6 +48,20 @@ test("period doublings of the quadratic map are found to 1e-9", () => {
   expect(relative(limit, 3.569945671870945)).toBeLessThan(1e-8);
 });
 
+// Source: Feigenbaum (1978): distances of the two points nearest the middle shrink by 2.502907875 from one doubling to
+// the next in the limit; at a cycle of 64 the second decimal has settled.
+test("cycles of the quadratic map shrink by Feigenbaum's second constant", () => {
+  const { places } = bifurcations(quadratic, { constant: "r", from: 2.8, to: 3.6, start: 0.3, most: 7 });
+  const gaps = places.slice(1).map(({ points, period }) => {
+    const nearest = points.reduce(
+      (best, x, i) => (Math.abs(x - 0.5) < Math.abs(points[best]! - 0.5) ? i : best),
+      0,
+    );
+    return Math.abs(points[nearest]! - points[(nearest + period / 2) % period]!);
+  });
+  expect(gaps.at(-2)! / gaps.at(-1)!).toBeCloseTo(2.502907875095892, 2);
+});
+
 // Source: the same points for N + r N (1 - N/K), where mu = 1 + r: 2, 2.449490, 2.544090, 2.564407 (6 decimals).
 test("period doublings of the crowding rule are those of the quadratic map less one", () => {
   const { places } = bifurcations(recurrence("ΔN = r*N*(1 - N/K)"), {
@@ -76,6 +90,9 @@ test("period doublings of the Ricker rule are found to 1e-9", () => {
   [2, 2.526467725854, 2.656353265157, 2.684623358294, 2.690708802601].forEach((value, i) => {
     expect(relative(places[i]!.at, value)).toBeLessThan(1e-9);
   });
+  // Source: the limit, about 2.69237, printed to 6 digits.
+  const [before, last] = places.slice(-2).map(({ at }) => at) as [number, number];
+  expect(last + (last - before) / (4.66920160910299 - 1)).toBeCloseTo(2.69237, 5);
 });
 
 // Source: the period-3 window opens at 1 + sqrt 8 exactly.
