@@ -154,6 +154,28 @@ test("a path that leaves the range of a state stops, and it is said at which per
   ]);
 });
 
+test("a run says how far it is, and ends where it is told to", () => {
+  const told: number[] = [];
+  const run = (stopAt: number) => () =>
+    simulate(recurrence("x[t+1] = 0.9*x"), {
+      initial: { x: 1 },
+      periods: 9,
+      noise: { x: { kind: "additive", sd: 1 } },
+      paths: 3000,
+      onProgress: (done, of) => {
+        told.push(done / of);
+        if (told.length === stopAt) throw new Error("stopped by the reader");
+      },
+    });
+  expect(run(Infinity)()).toHaveProperty("kind", "simulation");
+  expect(told).toHaveLength(30);
+  expect([...told].sort((a, b) => a - b)).toEqual(told);
+  expect(told.at(-1)).toBe(1);
+  told.length = 0;
+  expect(run(7)).toThrow("stopped by the reader");
+  expect(told).toHaveLength(7);
+});
+
 test("what cannot be run is refused in a whole sentence", () => {
   const loan = recurrence("owed[t+1] = owed - payment[t+1]", { inputs: ["payment"] });
   const run = (options: object) => () => simulate(loan, { initial: { owed: 1 }, periods: 3, ...options });

@@ -85,7 +85,8 @@ function recordedPast(
   const { values, time, labels } = fit.observations.groups.find((each) => each.name === group.group)!;
   const sign = direction === "rising" ? 1 : -1;
   const at = values[state]!.findIndex((each) => sign * (each - value) >= 0);
-  if (at <= 0) return undefined;
+  // A record that reads the state through an unknown factor is on another scale.
+  if (at <= 0 || fit.options.factor?.[state] !== undefined) return undefined;
   return { time: time[at]!, words: labels?.[at] ?? `${periodUnit} ${plain(time[at]!, 6)}` };
 }
 

@@ -130,7 +130,12 @@ function heldFit(fit: Fit, group: GroupFit, loose: Estimate, value: number): Gro
       ? { fixed: { ...options.fixed, [loose.name]: value } }
       : { initial: { ...options.initial, [state]: value } };
   try {
-    return fitRule(rule, own, { ...options, ...asked, start: Object.fromEntries(start) }).groups[0];
+    return fitRule(rule, own, {
+      ...options,
+      ...asked,
+      start: Object.fromEntries(start),
+      intervals: "none",
+    }).groups[0];
   } catch (error) {
     // A value at which the rule cannot be run is simply no rung; anything else is a fault and goes on.
     if ((error as Error).name === "ModelError") return undefined;
