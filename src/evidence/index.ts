@@ -2,8 +2,8 @@ export {
   type ChangePoint,
   type ChangePointOptions,
   changePoint,
-  type GroupChangePoint,
 } from "./change-point/change-point.js";
+export type { GroupChangePoint } from "./change-point/group-change-point.js";
 export { type Check, type CheckOptions, check, type GroupCheck } from "./check/check.js";
 export type { ErrorAdvice } from "./check/error-advice.js";
 export type { RecoveredUnknown, Recovery } from "./check/recovery.js";

@@ -1,5 +1,5 @@
 import type { Fit } from "../../estimate/index.js";
-import type { GroupChangePoint } from "./change-point.js";
+import type { GroupChangePoint } from "./group-change-point.js";
 
 /** What a search for a break comes to, as a client would be told. */
 export function breakSentence(found: Omit<GroupChangePoint, "sentence">, fit: Fit, level: number): string {

@@ -1,13 +1,9 @@
-import { type Fit, type FitOptions, fit as fitRule, type GroupFit } from "../../estimate/index.js";
-import { type RandomStream, randomStream } from "../../numeric/index.js";
+import { type Fit, type FitOptions, fit as fitRule } from "../../estimate/index.js";
+import { randomStream } from "../../numeric/index.js";
 import type { Observations } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
-import { type Refitter, refitter } from "../refit/refitter.js";
 import { refuseExact } from "../refit/refuse-exact.js";
-import { refuseNoDates } from "../refusals.js";
-import { type BreakDate, breakScan } from "./break-scan.js";
-import { breakSentence } from "./break-sentence.js";
-import { fRatio, type SupremumDraw, supremumDraw } from "./supremum-draw.js";
+import { type GroupChangePoint, groupChangePoint } from "./group-change-point.js";
 
 /** Options of `changePoint`; those of a fit but for the kind of error, which is the process. */
 export interface ChangePointOptions extends Omit<FitOptions, "errors" | "intervals"> {
@@ -17,34 +13,6 @@ export interface ChangePointOptions extends Omit<FitOptions, "errors" | "interva
   readonly draws?: number;
   /** Default 1. */
   readonly seed?: number;
-}
-
-/** The constants of one part of a record. */
-export interface Regime {
-  /** First and last time of the part, in the period column's unit. */
-  readonly from: number;
-  readonly to: number;
-  readonly constants: Readonly<Record<string, number>>;
-}
-
-/** Whether, and when, the constants of one group changed. */
-export interface GroupChangePoint {
-  readonly group: string;
-  /** Largest F over the dates. */
-  readonly statistic: number;
-  /** Of one as large in a record without a break; its Monte-Carlo error. */
-  readonly probability: number;
-  readonly probabilityError: number;
-  readonly found: boolean;
-  /** Likeliest first time of the part after, and the times that the record does not tell from it. */
-  readonly date: number;
-  readonly earliest: number;
-  readonly latest: number;
-  readonly before: Regime;
-  readonly after: Regime;
-  /** F at every date tried. */
-  readonly trace: readonly { readonly date: number; readonly statistic: number }[];
-  readonly sentence: string;
 }
 
 /** A search for a break in the constants of a rule. */
@@ -92,81 +60,3 @@ export function changePoint(
   const sentence = groups.map((group) => group.sentence).join(" ");
   return Object.freeze({ kind: "change-point", fit, level, draws, groups: Object.freeze(groups), sentence });
 }
-
-interface Settings {
-  readonly leastShare: number;
-  readonly draws: number;
-  readonly level: number;
-}
-
-function groupChangePoint(
-  fit: Fit,
-  group: GroupFit,
-  settings: Settings,
-  stream: RandomStream,
-): GroupChangePoint {
-  const again = refitter(fit, group);
-  const dates = again ? datesOf(again, settings.leastShare) : [];
-  if (again === undefined || dates.length === 0) throw refuseNoDates(group.group, group.count);
-  const { count, size } = again.rows;
-  const scan = breakScan(again, dates);
-  const best = scan.reduce((low, next) => (next.sumOfSquares < low.sumOfSquares ? next : low));
-  const statistic = fRatio(group.sumOfSquares, best.sumOfSquares, count, size);
-  const probability = chanceOf(statistic, supremumDraw(fit, group, again, dates), settings.draws, stream);
-  const close = scan.filter(
-    (date) => count * Math.log(date.sumOfSquares / best.sumOfSquares) <= cutOf(settings.level),
-  );
-  const { time } = fit.observations.groups.find((each) => each.name === group.group)!;
-  const at = ({ first }: BreakDate): number => time[again.rows.entries[first]!]!;
-  const entry = again.rows.entries[best.first]!;
-  const regime = (from: number, to: number, values: Float64Array): Regime => ({
-    from,
-    to,
-    constants: {
-      ...group.constants,
-      ...Object.fromEntries(again.unknowns.names.map((name, i) => [name, values[i]!])),
-    },
-  });
-  const found = {
-    group: group.group,
-    statistic,
-    probability,
-    probabilityError: Math.sqrt((probability * (1 - probability)) / settings.draws),
-    found: probability <= 1 - settings.level,
-    date: at(best),
-    earliest: at(close[0]!),
-    latest: at(close[close.length - 1]!),
-    before: regime(time[0]!, time[entry - 1]!, best.before),
-    after: regime(at(best), time[time.length - 1]!, best.after),
-    trace: scan.map((date) => ({
-      date: at(date),
-      statistic: fRatio(group.sumOfSquares, date.sumOfSquares, count, size),
-    })),
-  };
-  return Object.freeze({ ...found, sentence: breakSentence(found, fit, settings.level) });
-}
-
-/** Share of drawn records without a break whose largest F reaches the statistic, the record itself counted in. */
-function chanceOf(statistic: number, draw: SupremumDraw, draws: number, stream: RandomStream): number {
-  let above = 1;
-  let drawn = 1;
-  for (let k = 0; k < draws; k++) {
-    const largest = draw(stream);
-    if (largest === undefined) continue;
-    drawn++;
-    if (largest >= statistic) above++;
-  }
-  return above / drawn;
-}
-
-/** First compared values of parts after, leaving the share, and size + 2 values, on either side; whole rows only. */
-function datesOf({ rows }: Refitter, leastShare: number): number[] {
-  const least = Math.max(rows.size + 2, Math.ceil(leastShare * rows.count));
-  const dates: number[] = [];
-  for (let first = least; first <= rows.count - least; first++)
-    if (rows.entries[first] !== rows.entries[first - 1]) dates.push(first);
-  return dates;
-}
-
-/** Cut of the log-likelihood ratio against the likeliest date: (1 - exp(-x/2))^2 = level. */
-const cutOf = (level: number): number => -2 * Math.log(1 - Math.sqrt(level));

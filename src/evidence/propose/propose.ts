@@ -1,19 +1,16 @@
 import type { Fit, FitOptions } from "../../estimate/index.js";
 import { fit as fitRule } from "../../estimate/index.js";
-import { randomStream } from "../../numeric/index.js";
 import type { Observations } from "../../record/index.js";
-import { type ErrorAdvice, errorAdvice } from "../check/error-advice.js";
+import type { ErrorAdvice } from "../check/error-advice.js";
 import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseNothingFits } from "../refusals.js";
+import { adviceOn } from "./advice-on.js";
 import { candidatesFor, type NotTried } from "./candidates.js";
 import { holdOut } from "./hold-out.js";
 import { oneState } from "./one-state.js";
 import { proposalWords } from "./proposal-words.js";
 import { type Standing, supportedRules } from "./supported-rules.js";
 import { type Tried, tryRules } from "./try-rules.js";
-
-/** Records drawn with each kind of error, for the advice. */
-const adviceDraws = 60;
 
 /** Options of `propose`; others are those of a fit. */
 export interface ProposeOptions extends Omit<FitOptions, "errors" | "intervals"> {
@@ -129,25 +126,6 @@ function judged({ record, settings, tried, notTried, errors, seed }: Trial): Pro
   };
   const words = proposalWords(result, tried.length, held?.values);
   return Object.freeze({ kind: "proposal", ...result, ...words });
-}
-
-/**
- * Which kind of error the record speaks for, by the rule that explains it best with either: where the two rules do not
- * agree it is left open.
- */
-function adviceOn(tried: readonly Tried[], seed: number): ErrorAdvice | undefined {
-  const best = (kind: Tried["errors"]): Tried | undefined =>
-    tried
-      .filter((each) => each.errors === kind)
-      .reduce<Tried | undefined>(
-        (low, next) => (low && low.aicCorrected <= next.aicCorrected ? low : next),
-        undefined,
-      );
-  const [first, second] = [best("process"), best("observation")].map(
-    (each) => each && errorAdvice(each.fit, each.fit.groups[0]!, adviceDraws, randomStream(seed)),
-  );
-  if (first === undefined || second === undefined || first.kind === second.kind) return first ?? second;
-  return first.kind === "undecided" ? first : second.kind === "undecided" ? second : undefined;
 }
 
 function rowOf(standing: Standing, heldOut: number | undefined, beatenBy: string | undefined): ProposedRule {
