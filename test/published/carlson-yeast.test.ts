@@ -103,6 +103,33 @@ describe("Carlson's yeast record", () => {
     expect(off(group(stepped).sumOfSquares, 194.3253782)).toBeLessThan(1e-6);
   });
 
+  test("Y2 and Y3: the Gompertz curve and the exponential, which fit worse", () => {
+    const curve = leastSquares({
+      residuals: ([K, b, r]) => yeast.map((y, t) => y - K! * Math.exp(-b! * Math.exp(-r! * t))),
+      start: [600, 8, 0.4],
+    });
+    [689.2620465, 10.22257318, 0.3458879401].forEach((expected, i) => {
+      expect(off(curve.estimates[i], expected)).toBeLessThan(1e-6);
+    });
+    expect(off(curve.sumOfSquares, 4001.198097)).toBeLessThan(1e-6);
+    const growth = fit(recurrence("N[t+1] = R*N"), record(), { errors: "observation" });
+    expect(off(named(growth, "N[0]").value, 133.0454161)).toBeLessThan(1e-6);
+    expect(off(Math.log(named(growth, "R").value), 0.1016553322)).toBeLessThan(1e-6);
+    expect(off(group(growth).sumOfSquares, 242396.3485)).toBeLessThan(1e-6);
+    expect(off(group(growth).criteria.aic, 239.5435836)).toBeLessThan(1e-6);
+  });
+
+  test("Y6: log ratio on level", () => {
+    const line = fit(recurrence("N[t+1] = N*exp(a + b*N)"), record(), {
+      errors: "process",
+      spread: "proportional",
+    });
+    expect(off(named(line, "a").value, 0.5217460871)).toBeLessThan(1e-6);
+    expect(off(named(line, "b").value, -0.0008031497502)).toBeLessThan(1e-6);
+    expect(off(group(line).sumOfSquares, 0.03115844114)).toBeLessThan(1e-6);
+    expect(off(-named(line, "a").value / named(line, "b").value, 649.6249136)).toBeLessThan(1e-6);
+  });
+
   test("Y5: change on level without intercept, and the capacity with its delta-method error", () => {
     const line = fit(recurrence("ΔN = r*N + s*N^2"), record(), { errors: "process" });
     expect(off(named(line, "r").value, 0.5576851103)).toBeLessThan(1e-6);

@@ -3,7 +3,6 @@ import type { ObservedGroup } from "../../record/index.js";
 import { linearInConstants, type Rule } from "../../rule/index.js";
 import { type FitOptions, onLogScale } from "../options/fit-options.js";
 import type { FitRows } from "../rows/fit-rows.js";
-import { sumOfSquaresAt } from "../systems/normal-equations.js";
 import { type Prepared, prepared } from "../systems/prepared.js";
 import { type Unknowns, unknownsOf } from "../unknowns/unknowns.js";
 import { trialPoints } from "./trial-values.js";
@@ -47,7 +46,7 @@ function candidates(
   if (options.factor !== undefined) {
     const trials = trialPoints(rule, group, options, unknowns, 20 * most);
     for (const trial of trials) scaleFactors(trial, unknowns, rows);
-    return polished(ranked(trials, rows, 3 * kept), whole, unknowns).map((point) => point.at);
+    return polished(ranked(trials, whole, 3 * kept), whole, unknowns).map((point) => point.at);
   }
   const stepOptions = { ...options, errors: "process" as const };
   const stepUnknowns = unknownsOf(rule, stepOptions);
@@ -59,15 +58,15 @@ function candidates(
     stepUnknowns,
     hasOneOptimum(rule, group, options, stepUnknowns) ? 1 : most,
   );
-  const best = ranked(trials, step.rows, kept);
+  const best = ranked(trials, step, kept);
   const better = polished(best, step, stepUnknowns);
   if (options.errors === "process") return better.map((point) => point.at);
   const carried = (at: Float64Array): Float64Array => withInitial(at, unknowns, group, options);
   // A one-step fit can run off where the trajectory has its optimum, so trial points stay in the choice as they are.
-  const direct = ranked(trials.map(carried), rows, 3);
+  const direct = ranked(trials.map(carried), whole, 3);
   const stepped = ranked(
     better.map((point) => carried(point.at)),
-    rows,
+    whole,
     kept - 3,
   );
   return sorted([...stepped, ...direct]).map((point) => point.at);
@@ -90,8 +89,8 @@ function hasOneOptimum(
 }
 
 /** The best of several points; of points with the same sum only one. */
-function ranked(points: readonly Float64Array[], rows: FitRows, keep: number): Point[] {
-  const all = sorted(points.map((at) => ({ at, sum: sumOfSquaresAt(rows, at) })));
+function ranked(points: readonly Float64Array[], { system }: Prepared, keep: number): Point[] {
+  const all = sorted(points.map((at) => ({ at, sum: system.evaluate(at) })));
   const distinct = all.filter(({ sum }, i) => i === 0 || sum > all[i - 1]!.sum * (1 + 1e-6));
   return distinct.slice(0, keep);
 }

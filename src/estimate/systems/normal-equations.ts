@@ -31,17 +31,6 @@ export function normalEquations(rows: FitRows): LinearisedSystem {
   };
 }
 
-/** The sum of squares alone, without derivatives. */
-export function sumOfSquaresAt(rows: FitRows, unknowns: Float64Array): number {
-  rows.prepare(unknowns, false);
-  let sum = 0;
-  for (let i = 0; i < rows.count; i++) {
-    const residual = rows.residualAt(i);
-    sum += residual * residual;
-  }
-  return sum;
-}
-
 function accumulate(rows: FitRows, gram: Float64Array, gradient: Float64Array): number {
   const { row, size, count } = rows;
   let sum = 0;
