@@ -1,5 +1,6 @@
 import { type Figure, figure, type Panel } from "./figure.js";
 import type { Layer } from "./layer.js";
+import { smoothProfile } from "./smooth-profile.js";
 
 /** How the fit worsens as one constant is held away from its estimate. */
 export interface DrawnProfile {
@@ -29,8 +30,12 @@ export interface ProfileFigureOptions {
   readonly notes?: readonly string[];
 }
 
+/** A profile is drawn up to so many times its cut-off. */
+const heights = 2.6;
+
 /**
- * Profiles of constants, a panel each, with the cut-off and the interval it gives; an arrow at the cut-off says that
+ * Profiles of constants, a panel each, with the cut-off and the interval it gives. The line between the computed
+ * places is an arc (its signed root is drawn straight); an arrow at the cut-off says that
  * the record sets no limit on that side.
  */
 export function profileFigure(options: ProfileFigureOptions): Figure {
@@ -40,7 +45,7 @@ export function profileFigure(options: ProfileFigureOptions): Figure {
     (profile): Panel => ({
       title: alone ? "" : profile.constant,
       x: { title: profile.constant, unit: profile.unit },
-      y: { title: measure, ends: [0, 2.6 * cut] },
+      y: { title: measure, ends: [0, heights * cut] },
       layers: profileLayers(profile, cut, level),
     }),
   );
@@ -49,11 +54,16 @@ export function profileFigure(options: ProfileFigureOptions): Figure {
 
 function profileLayers(profile: DrawnProfile, cut: number, level: string): Layer[] {
   const { held, worsening, estimate, lower, upper } = profile;
-  const first = held[0] ?? estimate;
-  const last = held[held.length - 1] ?? estimate;
+  const curve = smoothProfile(profile, heights * cut);
+  const first = curve.x[0] ?? estimate;
+  const last = curve.x.at(-1) ?? estimate;
+  const shown = Array.from(held, (x, i) => ({ x, y: worsening[i] as number })).filter(
+    ({ x, y }) => x >= first && x <= last && y <= heights * cut,
+  );
   const ends = [lower, upper].filter((end) => end !== undefined);
   return [
-    { mark: "line", name: "profile", x: held, y: worsening, style: 0 },
+    { mark: "line", name: "profile", ...curve, style: 0 },
+    { mark: "points", name: "computed", x: shown.map(({ x }) => x), y: shown.map(({ y }) => y), style: 0 },
     { mark: "threshold", name: `cut-off ${level}`, y: cut, style: 1 },
     { mark: "vertical", name: "estimate", x: estimate, style: 4 },
     ...ends.map((x): Layer => ({ mark: "vertical", name: "end of interval", x, style: 3, inLegend: false })),
