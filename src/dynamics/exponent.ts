@@ -32,22 +32,31 @@ export interface Exponent {
 
 const blocks = 30;
 
-/** Follows a point and a small gap; gives the logarithm of the gap's growth in each step. */
-function gapFollower(held: HeldStep, start: Float64Array): () => number {
+/** Steps taken between two looks at a gap: few enough for its size to stay within the numbers of a computer. */
+const leapLength = 8;
+
+/** Follows a point and a small gap; gives the logarithm of the gap's growth over some steps. */
+function gapFollower(held: HeldStep, state: Float64Array): (periods: number) => number {
   const { width } = held;
-  let state = start;
-  let gap = new Float64Array(width).fill(1 / Math.sqrt(width));
-  return () => {
-    const { next, matrix } = held.slopes(state);
-    const moved = gap.map((_, i) => {
+  const gap = new Float64Array(width).fill(1 / Math.sqrt(width));
+  const moved = new Float64Array(width);
+  const leap = (periods: number): number => {
+    const matrix = held.leap(state, periods);
+    let square = 0;
+    for (let i = 0; i < width; i++) {
       let sum = 0;
       for (let j = 0; j < width; j++) sum += matrix[i * width + j]! * gap[j]!;
-      return sum;
-    });
-    const size = Math.hypot(...moved);
-    gap = size === 0 ? gap : moved.map((value) => value / size);
-    state = next;
+      moved[i] = sum;
+      square += sum * sum;
+    }
+    const size = Math.sqrt(square);
+    for (let i = 0; i < width && size > 0; i++) gap[i] = moved[i]! / size;
     return Math.log(size);
+  };
+  return (periods) => {
+    let sum = 0;
+    for (let left = periods; left > 0; left -= leapLength) sum += leap(Math.min(left, leapLength));
+    return sum;
   };
 }
 
@@ -77,13 +86,9 @@ export function exponent(rule: Rule, options: ExponentOptions = {}): Exponent {
     throw unreadableOption("periods", "a whole number from 300", periods);
   const held = holdStep(rule, options, "exponent");
   const grown = gapFollower(held, initialVector(rule, options.initial));
-  for (let t = 0; t < discard; t++) grown();
+  grown(discard);
   const size = Math.floor(periods / blocks);
-  const means = Float64Array.from({ length: blocks }, () => {
-    let sum = 0;
-    for (let t = 0; t < size; t++) sum += grown();
-    return sum / size;
-  });
+  const means = Float64Array.from({ length: blocks }, () => grown(size) / size);
   const value = means.reduce((sum, mean) => sum + mean, 0) / blocks;
   if (Number.isNaN(value) || value === Number.POSITIVE_INFINITY) throw pathLeaves("An exponent");
   const variance = means.reduce((sum, mean) => sum + (mean - value) ** 2, 0) / (blocks - 1);

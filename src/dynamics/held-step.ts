@@ -17,9 +17,17 @@ export interface HeldStep {
   /** Length of the state vector, kept past values included. */
   readonly width: number;
   readonly step: (state: Float64Array, next: Float64Array) => void;
+  /**
+   * Several steps, at most 64, in one go: the state vector moves on in place, and what comes back is how it there depends on the
+   * vector it came from, [width, width]; it holds until the next call.
+   */
+  readonly leap: (state: Float64Array, periods: number) => Float64Array;
   /** Next state vector and its slopes [width, width] by the present one. */
   readonly slopes: (state: Float64Array) => { readonly next: Float64Array; readonly matrix: Float64Array };
 }
+
+/** Periods that a leap may take. */
+const longestLeap = 64;
 
 /** Holds a rule's constants and inputs, or says why it cannot be held. */
 export function holdStep(rule: Rule, setting: HeldSetting, what: string): HeldStep {
@@ -28,12 +36,21 @@ export function holdStep(rule: Rule, setting: HeldSetting, what: string): HeldSt
   const inputs = heldInputs(rule, setting.inputs);
   const compiled = compileRule(rule);
   const width = rule.states.length + rule.memory.length;
-  // Columns long enough for every period that one step reads, with the step at their middle.
+  // Columns long enough for every period that a leap reads, with its first step in their middle.
   const reach = Math.max(0, ...inputReach(rule).flatMap(([earliest, latest]) => [-earliest, latest]));
-  const columns = Array.from(inputs, (value) => new Float64Array(2 * reach + 1).fill(value));
+  const columns = Array.from(inputs, (value) => new Float64Array(2 * reach + longestLeap).fill(value));
   const unknowns = constants.length + width;
   const values = new Float64Array(2 * width);
   const table = new Float64Array(2 * width * unknowns);
+  const leapt = new Float64Array(width * width);
+  let [longValues, longTable] = [values, table];
+  /** Slopes of row `row` of a table of sensitivities by the first state vector. */
+  const copySlopes = (from: Float64Array, row: number, to: Float64Array): void => {
+    for (let i = 0; i < width; i++) {
+      const begin = (row * width + i) * unknowns + constants.length;
+      for (let j = 0; j < width; j++) to[i * width + j] = from[begin + j]!;
+    }
+  };
   return {
     rule,
     constants,
@@ -43,11 +60,18 @@ export function holdStep(rule: Rule, setting: HeldSetting, what: string): HeldSt
     slopes: (state) => {
       compiled.pathWithSensitivities(state, constants, columns, reach, 1, values, table);
       const matrix = new Float64Array(width * width);
-      for (let i = 0; i < width; i++) {
-        const row = width * unknowns + i * unknowns + constants.length;
-        matrix.set(table.subarray(row, row + width), i * width);
-      }
+      copySlopes(table, 1, matrix);
       return { next: values.slice(width), matrix };
+    },
+    leap: (state, periods) => {
+      if (longValues.length < (periods + 1) * width) {
+        longValues = new Float64Array((periods + 1) * width);
+        longTable = new Float64Array((periods + 1) * width * unknowns);
+      }
+      compiled.pathWithSensitivities(state, constants, columns, reach, periods, longValues, longTable);
+      for (let i = 0; i < width; i++) state[i] = longValues[periods * width + i]!;
+      copySlopes(longTable, periods, leapt);
+      return leapt;
     },
   };
 }

@@ -170,6 +170,24 @@ test.each([
   expect(found.verdict).toBe("chaotic");
 });
 
+// Source: the exponent 0.419 of the quadratic map of the plane, as published to 3 digits (from memory).
+test("the exponent of a system is that of its fastest growing gap", () => {
+  const plane = recurrence("x[t+1] = 1 - a*x^2 + y\ny[t+1] = b*x");
+  const found = exponent(plane, {
+    constants: { a: 1.4, b: 0.3 },
+    initial: { x: 0.1, y: 0.1 },
+    periods: 300_000,
+  });
+  expect(Math.abs(found.value - 0.419)).toBeLessThan(2e-3);
+});
+
+test("an exponent under a held input is that of the rule with the input's value", () => {
+  const driven = recurrence("x[t+1] = r*x*(1 - x) + u[t+1] - u[t-1]", { inputs: ["u"] });
+  const options = { constants: { r: 3.2 }, initial: { x: 0.3 }, periods: 3000 };
+  const plain = exponent(quadratic, options).value;
+  expect(exponent(driven, { ...options, inputs: { u: 7 } }).value).toBeCloseTo(plain, 10);
+});
+
 // Source: slope 1 - b(1 - lam^(-1/b)), printed to 12 decimals.
 test.each([
   [1, 0.1],
