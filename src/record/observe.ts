@@ -1,3 +1,4 @@
+import { checkOptions } from "./check-options.js";
 import { checkIdentities } from "./checks/check-identities.js";
 import { checkValues } from "./checks/check-values.js";
 import { refuseMixedUnits } from "./checks/refuse-mixed-units.js";
@@ -10,7 +11,7 @@ import { noteMonthEnds } from "./period/note-month-ends.js";
 import { noteSteps } from "./period/note-steps.js";
 import { type PeriodAxis, periodAxis } from "./period/period-axis.js";
 import { inputsOf, readColumns } from "./read-columns.js";
-import { noDataRows, noUsableRows, optionMissing } from "./refusals.js";
+import { noDataRows, noUsableRows } from "./refusals.js";
 import { groupRows } from "./series/group-rows.js";
 import { observedGroup } from "./series/observed-group.js";
 
@@ -25,7 +26,7 @@ import { observedGroup } from "./series/observed-group.js";
  * @param options - which columns hold what, and the length of one step; see {@link ObservationOptions}.
  * @returns groups in the order of their first rows, findings, and counts of rows: read (those that meet
  *   `where`), used, flagged, corrected and refused (left out).
- * @throws {ModelError} `no-data-rows` | `mixed-units` | `identity-unread` | `no-usable-rows` | `option-missing` | `option-wrong` | `missing-column` |
+ * @throws {ModelError} `no-data-rows` | `mixed-units` | `identity-unread` | `no-usable-rows` | `option-missing` | `option-unknown` | `option-wrong` | `missing-column` |
  *   `doubled-column` | `not-a-number` | `decimal-sign-unclear` | `step-missing` | `no-period` |
  *   `ambiguous-date` | `no-such-period` | `off-step` | `not-increasing` | `duplicate-period`.
  * @example
@@ -36,8 +37,7 @@ import { observedGroup } from "./series/observed-group.js";
 export function observations(table: ColumnTable, options: ObservationOptions): Observations {
   const read = rowCount(table);
   if (read === 0) throw noDataRows();
-  if (options?.period === undefined)
-    throw optionMissing("period", 'Name the period column: period: "month".');
+  checkOptions(options);
   const { identities, measured = "level" } = options;
   const log = findingLog();
   noteDecisions(table, log);

@@ -89,3 +89,29 @@ export function decimalSignUnclear(row: number, column: string, cell: string): M
     { row, column, value: cell },
   );
 }
+
+export function optionUnknown(
+  option: string,
+  known: readonly string[],
+  nearest: readonly string[],
+): ModelError {
+  const hint = nearest.length > 0 ? ` Did you mean ${nearest.map((n) => `"${n}"`).join(" or ")}?` : "";
+  return new ModelError(
+    "option-unknown",
+    `There is no option "${option}". There are ${known.join(", ")}.${hint}`,
+    {
+      option,
+      known,
+      nearest,
+    },
+  );
+}
+
+export function notObservations(given: string): ModelError {
+  return new ModelError(
+    "not-observations",
+    `Differences are taken of observations; this is ${given}. Make them first: ` +
+      'observations(record, { period: "week", step: "week", value: "stock" }).',
+    { given },
+  );
+}

@@ -8,7 +8,7 @@ import { readExcel } from "./read-excel.js";
 import { readJson } from "./read-json.js";
 import type { Format, ReadOptions } from "./read-options.js";
 import { readParquet } from "./read-parquet.js";
-import { emptyFile, formatUnknown, noSuchFile, unreadableFile } from "./refusals.js";
+import { emptyFile, formatUnknown, noSuchFile, pathMissing, unreadableFile } from "./refusals.js";
 import { type FileScan, scanFile } from "./scan-file.js";
 import { signatureOf } from "./signature.js";
 import type { FileColumns, StoredTable } from "./stored-table.js";
@@ -28,10 +28,11 @@ const readers: Readonly<Record<Format, Reader>> = {
  * Reads a file as columns, with its checksum.
  *
  * @param path - relative to the working folder, which in a notebook is the notebook's own.
- * @throws {ModelError} `no-such-file` | `format-unknown` | `no-data-rows` | `unreadable-file`, and what the
+ * @throws {ModelError} `path-missing` | `no-such-file` | `format-unknown` | `no-data-rows` | `unreadable-file`, and what the
  *   reader of its format asks for.
  */
 export async function readTable(path: string, options: ReadOptions = {}): Promise<StoredTable> {
+  if (typeof path !== "string" || path === "") throw pathMissing(path);
   const full = resolve(path);
   await refuseAbsent(full, path);
   const signature = await signatureOf(full);

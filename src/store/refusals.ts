@@ -6,6 +6,14 @@ function shown(text: string): string {
   return `"${line.length > 60 ? `${line.slice(0, 60)}...` : line}"`;
 }
 
+export function pathMissing(path: unknown): ModelError {
+  return new ModelError(
+    "path-missing",
+    'The path of the file is missing; it is a text such as "data/stock.csv".',
+    { path },
+  );
+}
+
 export function noSuchFile(
   path: string,
   folder: string,

@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { type ObservationOptions, observations, tableOf } from "../../src/record/index.js";
+import { differences, type ObservationOptions, observations, tableOf } from "../../src/record/index.js";
 
 const hours: ObservationOptions = { period: "hours", step: { every: 12, of: "hour" }, value: "density" };
 
@@ -119,6 +119,26 @@ describe("observations", () => {
     const mixed = { hours: [0, 12, 24], density: [240, "n/a", 160.1] };
     expect(() => observations(tableOf(mixed), hours)).toThrow(
       'Row 2, density: "n/a" is not a number. If it marks a missing value, read the file with missing: ["n/a"]',
+    );
+  });
+
+  test("refuses options that it would have to pass over or misread", () => {
+    const refused = (options: object) =>
+      refusalOf(() => observations(tableOf({ hours: [0, 0], density: [1, 2] }), { ...hours, ...options }))
+        .message;
+    expect([
+      refused({ peroid: "hours" }),
+      refused({ duplicates: "mean" }),
+      refused({ value: ["density"] }),
+    ]).toMatchInlineSnapshot(`
+      [
+        "There is no option "peroid". There are measured, duplicates, disorder, offStep, value, replicates, weight, order, period, step, values, unit, by, where, censored, inputs, identities. Did you mean "period"?",
+        "The option "duplicates" is "mean"; it must be one of refuse, average, sum, first, last.",
+        "The option "value" is "["density"]"; it must be a text.",
+      ]
+    `);
+    expect(() => differences({ hours: [0] } as never)).toThrow(
+      "Differences are taken of observations; this is a value of type object.",
     );
   });
 });

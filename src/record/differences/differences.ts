@@ -1,6 +1,6 @@
 import type { Warning } from "../../numeric/index.js";
 import type { Observations } from "../observations.js";
-import { optionWrong } from "../refusals.js";
+import { notObservations, optionWrong } from "../refusals.js";
 import { type DifferenceSeries, differenceSeries } from "./difference-series.js";
 import { noPairs } from "./refusals.js";
 
@@ -35,7 +35,7 @@ export interface Differences {
  * of steps it spans. Any other difference is formed only where the rows it needs lie exactly that far apart.
  *
  * @returns change, ratio and per-head change of every pair, in the unit of the state (the ratio has none).
- * @throws {ModelError} `option-wrong` | `no-pairs` | `no-logarithm` (naming the row, with per "log").
+ * @throws {ModelError} `not-observations` | `option-wrong` | `no-pairs` | `no-logarithm` (naming the row, with per "log").
  * @example
  * const table = tableOf({ week: [1, 2, 4], eggs: [10, 12, 18] });
  * const counts = observations(table, { period: "week", step: { every: 1, of: "week" }, value: "eggs" });
@@ -43,6 +43,10 @@ export interface Differences {
  * // changes.steps is [1, 2] and changes.change is [2, 6]
  */
 export function differences(observations: Observations, options: DifferenceOptions = {}): Differences {
+  if (observations?.kind !== "observations")
+    throw notObservations(
+      Array.isArray(observations) ? "an array" : `a value of type ${typeof observations}`,
+    );
   const { order = 1, lag = 1, per = "step", seasonal } = options;
   positiveWhole("order", order);
   positiveWhole("lag", lag);
