@@ -27,7 +27,16 @@ export function display(
   const display_id = options.display_id ?? randomUUID();
   const named = options.display_id !== undefined;
   send(bundle, display_id, named, options.update === true);
-  return { display_id, update: (next) => send(next, display_id, true, true) };
+  const handle: DisplayHandle = { display_id, update: (next) => send(next, display_id, true, true) };
+  handles.add(handle);
+  return handle;
+}
+
+const handles = new WeakSet<object>();
+
+/** Whether a value is what `display` returned: its display has been shown, it is not shown again as a value. */
+export function isDisplayHandle(value: unknown): boolean {
+  return typeof value === "object" && value !== null && handles.has(value);
 }
 
 function send(bundle: MimeBundle | Promise<MimeBundle>, id: string, named: boolean, update: boolean): void {

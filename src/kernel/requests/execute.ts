@@ -2,6 +2,7 @@ import { cellName } from "../cells/cell-name.js";
 import type { CellOutcome } from "../cells/cell-session.js";
 import { errorReport } from "../cells/traceback.js";
 import { stringErrors } from "../language/string-errors.js";
+import { isDisplayHandle } from "../output/display.js";
 import { outputQueue } from "../output/output-queue.js";
 import { type Run, runAs } from "../output/run.js";
 import { valueBundle } from "../output/value-bundle.js";
@@ -92,7 +93,8 @@ async function outcomeOf(kernel: KernelState, execution: Execution): Promise<Cel
     const languages = hasString.test(code) ? await kernel.languages() : [];
     const refused = stringErrors(session.compiler.library, languages, code);
     const outcome = refused ?? (await session.run(code, cellName(run.serial), label, () => run.stopped));
-    if (outcome.kind === "value" && !run.silent) await show(outcome.value, execution);
+    const isShown = outcome.kind === "value" && !run.silent && !isDisplayHandle(outcome.value);
+    if (isShown) await show(outcome.value, execution);
     return outcome;
   } catch (cause) {
     return { kind: "failed", cause };
