@@ -27,7 +27,7 @@ describe("check", () => {
     const stream = randomStream(3);
     const values = Float64Array.from({ length: 30 }, (_, t) => 20 + 1.5 * t + stream.normal());
     const checked = check(fit(rule, series(values), { errors: "observation" }), { refits: 400 });
-    for (const unknown of checked.groups[0]!.recovery.unknowns) {
+    for (const unknown of checked.groups[0]!.recovery!.unknowns) {
       expect(Math.abs(unknown.coverage - 0.95)).toBeLessThan(0.044);
       expect(Math.abs(unknown.bias)).toBeLessThan((4 * unknown.deviation) / Math.sqrt(400));
     }
