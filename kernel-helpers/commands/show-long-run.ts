@@ -68,12 +68,19 @@ export function showCycles(found: Cycles): readonly Table[] {
   ];
 }
 
+const losses = {
+  flip: "flip: the period doubles",
+  fold: "fold: it meets an unstable one and vanishes",
+  "neimark-sacker": "Neimark-Sacker: turning motion takes over",
+} as const;
+
 /** Places at which what is stable changes. */
 export function showBifurcations(found: Bifurcations): readonly Table[] {
   const ends = {
     range: "The range was followed to its end.",
     most: "As many places as asked for were found.",
-    "no-cycle": "Beyond the last place no stable cycle of period up to 128 was left to follow.",
+    "no-cycle":
+      "Beyond the last place no stable cycle of period up to 128, or no rest level, was left to follow.",
   } as const;
   return [
     table({
@@ -85,7 +92,7 @@ export function showBifurcations(found: Bifurcations): readonly Table[] {
       ],
       rows: found.places.map((place) => ({
         ...place,
-        kind: place.kind === "flip" ? "flip: the period doubles" : "fold: the cycle vanishes",
+        kind: losses[place.kind],
       })),
       notes: [ends[found.stop]],
     }),

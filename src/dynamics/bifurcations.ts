@@ -2,8 +2,9 @@ import { findRoot } from "../numeric/index.js";
 import type { Rule } from "../rule/index.js";
 import { foldPlace } from "./fold-place.js";
 import { type Followed, followCycle, settleInCycle } from "./follow-cycle.js";
+import { followRestLevel } from "./follow-rest-level.js";
 import { type HeldSetting, type HeldStep, holdStep } from "./held-step.js";
-import { oneStateOnly, strangeName, unreadableOption } from "./refusals.js";
+import { missingValue, strangeName, unreadableOption } from "./refusals.js";
 
 export interface BifurcationsOptions extends HeldSetting {
   /** The constant that is varied. */
@@ -12,8 +13,11 @@ export interface BifurcationsOptions extends HeldSetting {
   readonly from: number;
   /** ... to here, up or down. */
   readonly to: number;
-  /** First value from which the cycle to be followed is reached. */
-  readonly start: number;
+  /**
+   * First value from which the cycle to be followed is reached; for a system a value by state, near the rest level
+   * to be followed.
+   */
+  readonly start: number | Readonly<Record<string, number>>;
   /** At most so many places; default 8. */
   readonly most?: number;
 }
@@ -22,11 +26,14 @@ export interface BifurcationsOptions extends HeldSetting {
 export interface Bifurcation {
   /** Value of the constant. */
   readonly at: number;
-  /** `flip`: a cycle of twice the period takes over; `fold`: the cycle meets an unstable one and both vanish. */
-  readonly kind: "flip" | "fold";
+  /**
+   * `flip`: a cycle of twice the period takes over; `fold`: it meets an unstable one and both vanish;
+   * `neimark-sacker`: turning motion around it takes over (systems and rules with lags only).
+   */
+  readonly kind: "flip" | "fold" | "neimark-sacker";
   /** Period of the cycle that is left. */
   readonly period: number;
-  /** Its values there. */
+  /** Its values there; of a system the value of each state in order. */
   readonly points: readonly number[];
 }
 
@@ -35,7 +42,7 @@ export interface Bifurcations {
   readonly rule: Rule;
   readonly constant: string;
   readonly places: readonly Bifurcation[];
-  /** Why the following ended: `range` done, `most` found, or no cycle of period up to 128 to follow any more. */
+  /** Why the following ended: `range` done, `most` found, or nothing to follow any more. */
   readonly stop: "range" | "most" | "no-cycle";
 }
 
@@ -120,27 +127,52 @@ function follow(walk: Walk, start: Here, most: number): Pick<Bifurcations, "plac
   return { places, stop: "no-cycle" };
 }
 
+/** First values by state: one number serves a rule of one state. */
+function startOf(rule: Rule, start: BifurcationsOptions["start"]): Float64Array {
+  if (typeof start === "number") {
+    if (rule.states.length > 1) throw unreadableOption("start", "a value for every state", start);
+    return Float64Array.of(start);
+  }
+  return Float64Array.from(rule.states, (state) => {
+    const value = start[state];
+    if (value === undefined) throw missingValue("start of", state, Object.keys(start));
+    return value;
+  });
+}
+
+function followedCycle(
+  walk: Walk,
+  from: number,
+  start: number,
+  most: number,
+): Pick<Bifurcations, "places" | "stop"> {
+  const cycle = settleInCycle(walk.held, start);
+  return cycle === undefined ? { places: [], stop: "no-cycle" } : follow(walk, { at: from, cycle }, most);
+}
+
 /**
- * Follows a stable cycle of a rule of one state while a constant is varied, and finds where it loses its hold: the
- * root of the cycle's multiplier at -1 (period doubling) or the meeting of two cycles at +1, not a place read off a
+ * Follows what is stable while a constant is varied, and finds where it loses its hold: of a rule of one state, the
+ * root of a cycle's multiplier at -1 (period doubling, on to the next cycle) or the meeting of two cycles at +1; of a
+ * system or a rule with lags, the root at modulus 1 of a rest level's leading multiplier. Never a place read off a
  * picture.
  *
- * @throws {ModelError} `one-state-only` | `unknown-name` | `missing-value` | `unreadable-option`.
+ * @throws {ModelError} `unknown-name` | `missing-value` | `unreadable-option` | `rule-changes-with-time`.
  * @example bifurcations(recurrence("x[t+1] = r*x*(1 - x)"), { constant: "r", from: 2.8, to: 3.3, start: 0.3 }).places[0].at.toFixed(9); // "3.000000000"
  */
 export function bifurcations(rule: Rule, options: BifurcationsOptions): Bifurcations {
-  const { constant, from, to, start, most = 8 } = options;
-  if (rule.states.length !== 1 || rule.memory.length > 0) throw oneStateOnly("A bifurcation", rule.states);
+  const { constant, from, to, most = 8 } = options;
   const slot = rule.constants.indexOf(constant);
   if (slot < 0) throw strangeName("constant", constant, rule.constants);
   if (!Number.isFinite(from) || !Number.isFinite(to) || from === to) {
     throw unreadableOption("to", `a number other than from, ${from}`, to);
   }
   const setting = { ...options, constants: { ...options.constants, [constant]: from } };
-  const walk: Walk = { held: holdStep(rule, setting, "bifurcation"), slot, to };
-  const cycle = settleInCycle(walk.held, start);
+  const held = holdStep(rule, setting, "bifurcation");
+  const start = startOf(rule, options.start);
   const found =
-    cycle === undefined ? { places: [], stop: "no-cycle" as const } : follow(walk, { at: from, cycle }, most);
+    held.width === 1
+      ? followedCycle({ held, slot, to }, from, start[0]!, most)
+      : followRestLevel(held, slot, { from, to }, start, most);
   return Object.freeze({
     kind: "bifurcations",
     rule,

@@ -238,6 +238,34 @@ test.each([0, 1, 2, 3])("density acting %d periods late is stable up to the know
   expect(verdict(limit).boundary).toBe(lag === 0 ? "flip" : "neimark-sacker");
 });
 
+test.each([1, 2, 3])(
+  "the limit with density acting %d periods late is found as a root, and turning",
+  (lag) => {
+    const { places } = bifurcations(rules.delayedDensity({ lag }), {
+      constant: "r",
+      constants: { K: 100 },
+      from: 0.2,
+      to: 1.5,
+      start: 100,
+    });
+    expect(places.map(({ kind }) => kind)).toEqual(["neimark-sacker"]);
+    expect(relative(places[0]!.at, 2 * Math.cos((Math.PI * lag) / (2 * lag + 1)))).toBeLessThan(1e-9);
+  },
+);
+
+// Source: May (1978): the clumped host-parasitoid rule is stable if and only if k < 1, exactly.
+test("clumping holds a host and its parasitoid up to k = 1", () => {
+  const { places } = bifurcations(rules.clumpedParasitoid(), {
+    constant: "k",
+    constants: { lam: 2, a: 0.1, c: 1 },
+    from: 0.5,
+    to: 1.5,
+    start: { H: 30, P: 15 },
+  });
+  expect(places.map(({ kind }) => kind)).toEqual(["neimark-sacker"]);
+  expect(relative(places[0]!.at, 1)).toBeLessThan(1e-9);
+});
+
 test("an attractor diagram shows the known cycles", () => {
   const diagram = attractor(quadratic, {
     constant: "r",
