@@ -70,7 +70,8 @@ export function minimiseSquares(
     count: 0,
     lastRefinement: Number.POSITIVE_INFINITY,
   };
-  const problem: SearchProblem = { system, bounds, workspace, gradientTolerance, stepTolerance };
+  const steps = bounds === undefined ? onSystem(workspace, system) : workspace;
+  const problem: SearchProblem = { system, bounds, workspace, steps, gradientTolerance, stepTolerance };
   if (!Number.isFinite(at.sum))
     return ended(at, { kind: "failed", reason: "the model is not finite at the start" });
   workspace.scale.fill(0);
@@ -78,6 +79,11 @@ export function minimiseSquares(
   at.radius = reach * scaledLength(workspace.scale, constants, system.size) || reach;
   while (stop === undefined) stop = at.evaluations > iterationLimit ? outOfIterations : tryStep(problem, at);
   return ended(at, stop);
+}
+
+/** The workspace with the system's own triangle in place of that of the constants that may move, which are all. */
+function onSystem(workspace: SquaresWorkspace, { triangle, projected }: LinearisedSystem): SquaresWorkspace {
+  return { ...workspace, triangle, projected, freeScale: workspace.scale, freeStep: workspace.step };
 }
 
 function ended(at: Search, stop: StopReason): Minimum {

@@ -10,6 +10,8 @@ export interface SearchProblem {
   readonly system: LinearisedSystem;
   readonly bounds: Bounds | undefined;
   readonly workspace: SquaresWorkspace;
+  /** The workspace as steps are found on it: without bounds it reads and writes the system's own arrays. */
+  readonly steps: SquaresWorkspace;
   readonly gradientTolerance: number;
   readonly stepTolerance: number;
 }
@@ -50,22 +52,11 @@ export function settle(problem: SearchProblem, at: Search): StopReason | undefin
   if (bounds !== undefined) {
     at.count = holdAtBounds(workspace, system.triangle, system.projected, at.constants, bounds);
   } else {
-    takeAll(workspace, system);
     at.count = system.size;
   }
-  return offset(workspace, at.count) <= problem.gradientTolerance * Math.sqrt(at.sum)
+  return offset(problem.steps, at.count) <= problem.gradientTolerance * Math.sqrt(at.sum)
     ? byGradient
     : undefined;
-}
-
-/** Copies entry by entry: for so few, calling `set` costs more than the copy. */
-function takeAll(workspace: SquaresWorkspace, system: LinearisedSystem): void {
-  const { size } = workspace;
-  for (let i = 0; i < size; i++) {
-    workspace.projected[i] = system.projected[i]!;
-    workspace.freeScale[i] = workspace.scale[i]!;
-    for (let j = i; j < size; j++) workspace.triangle[i * size + j] = system.triangle[i * size + j]!;
-  }
 }
 
 /** Tries one step, and moves there when the sum of squares falls enough; says whether the search is over. */
@@ -114,8 +105,7 @@ function findStep(problem: SearchProblem, at: Search): void {
     at.damping = boundedStep(workspace, system, at.constants, bounds, at.count, at.radius, at.damping);
     return;
   }
-  at.damping = trustRegionStep(workspace, at.count, at.radius, at.damping);
-  for (let j = 0; j < workspace.size; j++) workspace.step[j] = workspace.freeStep[j]!;
+  at.damping = trustRegionStep(problem.steps, at.count, at.radius, at.damping);
 }
 
 function changeRadius(
