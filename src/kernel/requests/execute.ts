@@ -81,6 +81,7 @@ async function answered(kernel: KernelState, execution: Execution): Promise<obje
     if (!run.silent) run.output.add("error", report);
     return { status: "error", ...report };
   } finally {
+    kernel.questions.abandon();
     kernel.interrupts.end();
   }
 }

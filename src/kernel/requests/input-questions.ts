@@ -1,3 +1,4 @@
+import { Interrupted } from "../cells/cell-error.js";
 import { presentRun } from "../output/run.js";
 import type { Message } from "../protocol/message.js";
 import { inputNotAllowed } from "../refusals.js";
@@ -6,11 +7,18 @@ import { inputNotAllowed } from "../refusals.js";
 export interface InputQuestions {
   readonly ask: (prompt?: string, options?: { readonly password?: boolean }) => Promise<string>;
   readonly answer: (message: Message) => void;
+  /** Gives up what is still unanswered: its cell has ended, and nobody will answer. */
+  readonly abandon: () => void;
+}
+
+interface Waiting {
+  readonly answered: (text: string) => void;
+  readonly abandoned: (cause: Error) => void;
 }
 
 /** @see Jupyter messaging, "Messages on the stdin (ROUTER/DEALER) channel". */
 export function inputQuestions(send: (request: Message, content: object) => void): InputQuestions {
-  const waiting = new Map<string, (answer: string) => void>();
+  let waiting: Waiting | undefined;
   let turn: Promise<unknown> = Promise.resolve();
   return {
     ask: (prompt = "", options = {}) => {
@@ -19,15 +27,22 @@ export function inputQuestions(send: (request: Message, content: object) => void
       const asked = turn.then(async () => {
         await run.output.drained();
         send(run.request, { prompt: String(prompt), password: options.password === true });
-        return new Promise<string>((resolve) => waiting.set(run.request.header.session, resolve));
+        return new Promise<string>((answered, abandoned) => {
+          waiting = { answered, abandoned };
+        });
       });
-      turn = asked;
+      // The next question does not mind how this one ended.
+      turn = asked.catch(() => undefined);
       return asked;
     },
-    answer: (message) => {
-      const resolve = waiting.get(message.header.session) ?? [...waiting.values()].at(-1);
-      waiting.clear();
-      resolve?.(String(message.content["value"] ?? ""));
+    answer: ({ content }) => {
+      const given = waiting;
+      waiting = undefined;
+      given?.answered(String(content["value"] ?? ""));
+    },
+    abandon: () => {
+      waiting?.abandoned(new Interrupted());
+      waiting = undefined;
     },
   };
 }
