@@ -1,10 +1,10 @@
-import { spawnSync } from "node:child_process";
 import { copyFileSync, cpSync, readdirSync, readFileSync } from "node:fs";
 import { join } from "node:path";
 import { describe, expect, test } from "vitest";
 import { installSpecification } from "../../src/casework/index.js";
 import { kernelCommand, plain, root, testFolder } from "./kernel-in-test.js";
 import { isThere } from "./needed-program.js";
+import { ran } from "./ran.js";
 
 // Source: Debian's own programs (jupyter nbconvert, jupyter console) drive the kernel as their users do.
 const notebooks = join(root, "notebooks");
@@ -28,9 +28,9 @@ function placeForCases(): { readonly folder: string; readonly env: NodeJS.Proces
 
 describe.skipIf(!isThere(python, "-m", "nbconvert", "--version"))("jupyter nbconvert", () => {
   const { folder, env } = placeForCases();
-  test.each(worked)("executes %s", { timeout: 300_000 }, (name) => {
+  test.each(worked)("executes %s", { timeout: 300_000 }, async (name) => {
     const words = ["-m", "nbconvert", "--to", "notebook", "--execute", "--output", `done-${name}`, name];
-    const done = spawnSync(python, words, { cwd: folder, env, encoding: "utf8" });
+    const done = await ran(python, words, { cwd: folder, env });
     expect(done.status, done.stderr).toBe(0);
     const executed = JSON.parse(readFileSync(join(folder, `done-${name}`), "utf8"));
     const types = executed.cells.flatMap(
@@ -45,11 +45,11 @@ describe.skipIf(!isThere(python, "-m", "nbconvert", "--version"))("jupyter nbcon
 });
 
 describe.skipIf(!isThere(jupyter, "console", "--version"))("jupyter console", () => {
-  test("runs what is typed into it", { timeout: 120_000 }, () => {
+  test("runs what is typed into it", { timeout: 120_000 }, async () => {
     const { folder, env } = placeForCases();
     const input = "const owed = 1200\nowed * 2\nexit\n";
     const words = ["console", "--kernel", "periodwise", "--simple-prompt"];
-    const done = spawnSync(jupyter, words, { cwd: folder, env, input, encoding: "utf8", timeout: 100_000 });
+    const done = await ran(jupyter, words, { cwd: folder, env, input });
     expect(plain(done.stdout), done.stderr).toContain("2400");
   });
 });
