@@ -4,7 +4,8 @@ import { readsPeriod } from "../rule/index.js";
 import { type CentralPath, centralPath, stateLimits } from "./central-path.js";
 import { keepLimit } from "./check-run.js";
 import { type DrawnStarts, drawnStarts, type UnknownsDraw, unknownsDraw } from "./constants/drawn-starts.js";
-import { blockStreams, type EnsembleRun, runEnsemble } from "./ensemble/ensemble.js";
+import { blockStreams } from "./ensemble/block-streams.js";
+import { type EnsembleRun, runEnsemble } from "./ensemble/ensemble.js";
 import { type Gatherer, gatherer } from "./ensemble/gather.js";
 import { passagesOf, placedWatches } from "./ensemble/placed-watches.js";
 import { type FitGround, fitGround } from "./fit-ground.js";
@@ -138,6 +139,7 @@ function runBoth(
     ...run,
     change: change.map((noise) => noise && noiseDraw(noise)),
     reading: reading.map((noise) => noise && noiseDraw(noise)),
+    spread: starts.spread,
     onRow: future.onRow,
     onProgress: half(1),
   });

@@ -1,7 +1,8 @@
 export { type CentralPath, centralPath, type Ground, stateLimits } from "./central-path.js";
 export { type DrawnStarts, drawnStarts, unknownsDraw } from "./constants/drawn-starts.js";
 export type { Band } from "./ensemble/band.js";
-export { blockStreams, type EnsembleRun, runEnsemble, type Starts } from "./ensemble/ensemble.js";
+export { blockStreams } from "./ensemble/block-streams.js";
+export { type EnsembleRun, runEnsemble, type Starts } from "./ensemble/ensemble.js";
 export type { Growth } from "./ensemble/growth.js";
 export { type Direction, type Passage, passageLog, type Watch } from "./ensemble/passage.js";
 export { type FitGround, fitGround } from "./fit-ground.js";

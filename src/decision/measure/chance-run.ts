@@ -13,6 +13,9 @@ import {
 import type { Setting } from "../setting/set-value.js";
 import type { Standing } from "../setting/standing.js";
 
+/** Starts with what a fit leaves open of its sigma. */
+type RunStarts = Starts & Pick<EnsembleRun, "spread">;
+
 /** What listens to a run. */
 export type Listener = Pick<EnsembleRun, "onRow" | "onStep">;
 
@@ -32,7 +35,7 @@ export function chanceRun(standing: Standing): ChanceRun {
   return (listener, setting, value) => {
     const ground = setting === undefined ? standing.ground : setting.at(value!);
     const streams = seeds.map((seed) => seed.jump());
-    const drawn =
+    const drawn: RunStarts =
       fit === undefined
         ? sharedStarts(ground, paths)
         : drawnStarts(fit, standing.fitGround!, source!, paths, streams);
@@ -46,6 +49,7 @@ export function chanceRun(standing: Standing): ChanceRun {
       starts: setting === undefined ? drawn : withSetting(drawn, setting, ground),
       change: change.map((noise) => noise && noiseDraw(noise)),
       reading: rule.states.map(() => undefined),
+      spread: drawn.spread,
       limits: stateLimits(rule),
       streams,
       ...listener,
@@ -53,8 +57,14 @@ export function chanceRun(standing: Standing): ChanceRun {
   };
 }
 
-function sharedStarts(ground: Ground, paths: number): Starts {
-  return { paths, size: ground.constants.length, constants: ground.constants, initial: ground.initial };
+function sharedStarts(ground: Ground, paths: number): RunStarts {
+  return {
+    spread: undefined,
+    paths,
+    size: ground.constants.length,
+    constants: ground.constants,
+    initial: ground.initial,
+  };
 }
 
 /** Drawn starts with a setting held: what is set is no longer drawn. */

@@ -1,6 +1,6 @@
 import { type Estimate, type Fit, fit as fitRule, type GroupFit } from "../../estimate/index.js";
 import { choleskyFactor, studentQuantile } from "../../numeric/index.js";
-import type { ConstantsDraw } from "./draw-constants.js";
+import { type ConstantsDraw, drawnSpread } from "./draw-constants.js";
 
 /** Fits with the loose unknown held, on each side of its estimate. */
 const rungsASide = 24;
@@ -46,6 +46,7 @@ export function drawAlongProfile(fit: Fit, group: GroupFit, loose: Estimate): Co
       for (let k = 0; k <= row; k++) out[i] = out[i]! + factor[row * (size - 1) + k]! * normals[k]!;
       row++;
     }
+    return drawnSpread(group.degreesOfFreedom, stream);
   };
 }
 

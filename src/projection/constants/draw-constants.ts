@@ -1,8 +1,17 @@
 import { choleskyFactor, type RandomStream } from "../../numeric/index.js";
 import { gammaDraw } from "../noise/gamma-draw.js";
 
-/** Draws unknowns of a fit around their estimates; writes into `out`. */
-export type ConstantsDraw = (stream: RandomStream, out: Float64Array) => void;
+/**
+ * Draws unknowns of a fit around their estimates; writes into `out`, and gives the drawn sigma as a multiple of the
+ * estimated one.
+ */
+export type ConstantsDraw = (stream: RandomStream, out: Float64Array) => number;
+
+/** sqrt((n - p)/chi-square(n - p)): what the residuals of a fit leave open of sigma. */
+export function drawnSpread(degreesOfFreedom: number, stream: RandomStream): number {
+  const half = 0.5 * degreesOfFreedom;
+  return Math.sqrt(half / gammaDraw(half, stream));
+}
 
 /**
  * A multivariate t around the estimates: normal by the covariance, widened by the uncertainty of sigma^2.
@@ -21,12 +30,12 @@ export function constantsDraw(
   const normals = new Float64Array(size);
   return (stream, out) => {
     for (let i = 0; i < size; i++) normals[i] = stream.normal();
-    const half = 0.5 * degreesOfFreedom;
-    const widen = Math.sqrt(half / gammaDraw(half, stream));
+    const widen = drawnSpread(degreesOfFreedom, stream);
     for (let i = 0; i < size; i++) {
       let sum = 0;
       for (let k = 0; k <= i; k++) sum += factor[i * size + k]! * normals[k]!;
       out[i] = estimates[i]! + widen * sum;
     }
+    return widen;
   };
 }

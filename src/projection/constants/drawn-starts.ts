@@ -1,6 +1,7 @@
 import type { Fit, GroupFit } from "../../estimate/index.js";
 import { choleskyFactor, type RandomStream } from "../../numeric/index.js";
-import { blockSize, type Starts } from "../ensemble/ensemble.js";
+import { blockSize } from "../ensemble/block-streams.js";
+import type { Starts } from "../ensemble/ensemble.js";
 import type { FitGround } from "../fit-ground.js";
 import { refuseNoDraws, refuseUndetermined } from "../refusals.js";
 import { drawAlongProfile, loosest } from "./draw-along-profile.js";
@@ -14,6 +15,8 @@ export interface DrawnStarts extends Starts {
   readonly method: DrawMethod;
   /** The unknown whose profile was followed. */
   readonly followed: string | undefined;
+  /** [paths]: sigma of each draw as a multiple of the estimate; absent where other spreads were fitted. */
+  readonly spread: Float64Array | undefined;
   /** Draws thrown away because an unknown left its bounds. */
   readonly discarded: number;
 }
@@ -58,13 +61,14 @@ export function drawnStarts(
   const unknowns = new Float64Array(ground.group.estimates.length);
   const stands = boundsOf(fit, ground.group);
   const begin = beginning(ground);
+  const spread = new Float64Array(paths);
   let discarded = 0;
   for (let path = 0; path < paths; path++) {
     const stream = streams[Math.floor(path / blockSize)]!;
-    source.draw(stream, unknowns);
+    spread[path] = source.draw(stream, unknowns);
     while (!stands(unknowns)) {
       if (++discarded > patience * (path + 1)) throw refuseNoDraws(ground.group.group);
-      source.draw(stream, unknowns);
+      spread[path] = source.draw(stream, unknowns);
     }
     constants.set(ground.constants, path * size);
     initial.set(begin(stream), path * width);
@@ -73,7 +77,15 @@ export function drawnStarts(
       else if (place >= 0) constants[path * size + place] = unknowns[i]!;
     });
   }
-  return { paths, size, constants, initial, method: source.method, followed: source.followed, discarded };
+  const { method, followed } = source;
+  const sigma = hasSigma(fit) ? spread : undefined;
+  return { paths, size, constants, initial, method, followed, spread: sigma, discarded };
+}
+
+/** Whether a fit's scatter is the sigma of its residuals, and not a likelihood's own spread or a given one. */
+function hasSigma({ options }: Fit): boolean {
+  const { spread = "constant", errors } = options;
+  return errors !== "both" && (spread === "constant" || spread === "proportional");
 }
 
 /** The first state vector of a path: known, or drawn from what a filter believes of it. */

@@ -1,6 +1,7 @@
-import { type RandomStream, randomStream } from "../../numeric/index.js";
+import type { RandomStream } from "../../numeric/index.js";
 import type { CompiledRule } from "../../rule/index.js";
 import type { NoiseDraw } from "../noise/noise.js";
+import { blockSize } from "./block-streams.js";
 import { endOutside, finiteLimits, unlimited } from "./limits.js";
 import { type Scatter, scatterer } from "./scatter.js";
 
@@ -32,6 +33,8 @@ export interface EnsembleRun {
   readonly reading: readonly (NoiseDraw | undefined)[];
   /** By state: values outside end their path. */
   readonly limits: readonly (readonly [number, number])[];
+  /** [paths]: by how much the normal errors of a path are wider than its draws say; absent for not at all. */
+  readonly spread?: Float64Array | undefined;
   /** One a block of paths; see `blockStreams`. */
   readonly streams: readonly RandomStream[];
   /** Told of every step before it is taken: the path, its state vector and constants, and the absolute period. */
@@ -40,15 +43,6 @@ export interface EnsembleRun {
   readonly onRow: (t: number, values: readonly Float64Array[]) => void;
   /** Called after every block of a period; what it throws ends the run. */
   readonly onProgress?: (done: number, of: number) => void;
-}
-
-/** Paths that share a stream. More paths leave the earlier whole blocks as they are; more periods leave all. */
-export const blockSize = 1024;
-
-/** One stream a block of paths, seeded from the given one. */
-export function blockStreams(stream: RandomStream, paths: number): readonly RandomStream[] {
-  const blocks = Math.ceil(paths / blockSize);
-  return Array.from({ length: blocks }, () => randomStream(Math.floor(stream.uniform() * 2 ** 53)));
 }
 
 /**
@@ -64,7 +58,7 @@ export function runEnsemble(run: EnsembleRun): void {
   const reported = Array.from({ length: states }, () => new Float64Array(paths));
   const moves: Moves = {
     run,
-    scatter: scatterer(run.streams, [...run.change, ...run.reading]),
+    scatter: scatterer(run.streams, [...run.change, ...run.reading], run.spread),
     limits: finiteLimits(run.limits),
   };
   for (let t = 0; t <= periods; t++) {
