@@ -1,6 +1,6 @@
-import { encloseStep, type Interval, type StepEnclosure } from "../rule/index.js";
-import { enclosedRoots } from "./enclosed-roots.js";
-import type { HeldStep } from "./held-step.js";
+import { encloseStep, type Interval, type StepEnclosure } from "../../rule/index.js";
+import { enclosedRoots } from "../rest/enclosed-roots.js";
+import type { HeldStep } from "../setting/held-step.js";
 
 const product = (a: Interval, b: Interval): Interval => {
   const all = [a[0] * b[0], a[0] * b[1], a[1] * b[0], a[1] * b[1]].map((value) =>

@@ -1,5 +1,5 @@
-import { inputReach, type Rule } from "../rule/index.js";
-import { missingInput, missingValue, strangeName } from "./refusals.js";
+import { inputReach, type Rule } from "../../rule/index.js";
+import { missingInput, missingValue, strangeName } from "../refusals.js";
 
 /** By input: one value a period from period 0, or one number that holds throughout. */
 export type InputValues = Readonly<Record<string, ArrayLike<number> | number>>;

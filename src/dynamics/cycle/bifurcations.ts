@@ -1,10 +1,10 @@
-import { findRoot } from "../numeric/index.js";
-import type { Rule } from "../rule/index.js";
+import { findRoot } from "../../numeric/index.js";
+import type { Rule } from "../../rule/index.js";
+import { missingValue, strangeName, unreadableOption } from "../refusals.js";
+import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.js";
 import { foldPlace } from "./fold-place.js";
 import { type Followed, followCycle, settleInCycle } from "./follow-cycle.js";
 import { followRestLevel } from "./follow-rest-level.js";
-import { type HeldSetting, type HeldStep, holdStep } from "./held-step.js";
-import { missingValue, strangeName, unreadableOption } from "./refusals.js";
 
 export interface BifurcationsOptions extends HeldSetting {
   /** The constant that is varied. */

@@ -1,8 +1,8 @@
-import { findRoot } from "../numeric/index.js";
+import { findRoot } from "../../numeric/index.js";
+import { type Multiplier, multipliersOf } from "../rest/multiplier.js";
+import { settleByNewton } from "../rest/settle-by-newton.js";
+import { type HeldStep, settled } from "../setting/held-step.js";
 import type { Bifurcation, Bifurcations } from "./bifurcations.js";
-import { type HeldStep, settled } from "./held-step.js";
-import { type Multiplier, multipliersOf } from "./multiplier.js";
-import { settleByNewton } from "./settle-by-newton.js";
 
 /** A rest level at one value of a constant, with its leading multiplier. */
 interface Level {

@@ -1,8 +1,8 @@
 import { Matrix, solve } from "ml-matrix";
-import { isLinearInStates, type Rule } from "../rule/index.js";
-import { type HeldSetting, holdStep } from "./held-step.js";
-import { type Multiplier, multipliersOf } from "./multiplier.js";
-import { notAMatrixRule } from "./refusals.js";
+import { isLinearInStates, type Rule } from "../../rule/index.js";
+import { notAMatrixRule } from "../refusals.js";
+import { type Multiplier, multipliersOf } from "../rest/multiplier.js";
+import { type HeldSetting, holdStep } from "../setting/held-step.js";
 
 /** What a matrix of shares and births does in the long run. */
 export interface MatrixGrowth {

@@ -1,4 +1,4 @@
-import type { Interval } from "../rule/index.js";
+import type { Interval } from "../../rule/index.js";
 
 /** Fractional parts of multiples of an irrational number spread evenly; one generator a dimension. */
 function generators(size: number): readonly number[] {

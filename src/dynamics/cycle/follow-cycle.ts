@@ -1,5 +1,5 @@
+import type { HeldStep } from "../setting/held-step.js";
 import { orbit, polishCycle } from "./cycle-points.js";
-import type { HeldStep } from "./held-step.js";
 
 /** A cycle at one value of a constant, with the product of its slopes. */
 export interface Followed {

@@ -1,8 +1,8 @@
-import { compileRule, explainFailure, quantitiesAt, type Rule, type StepPlace } from "../rule/index.js";
-import { type InputValues, inputColumns } from "./input-columns.js";
-import { unreadableOption } from "./refusals.js";
-import { constantsBySlot, type InitialValues, initialVector } from "./setting.js";
-import { namedValues, refuseOutsideRange } from "./valid-range.js";
+import { compileRule, explainFailure, quantitiesAt, type Rule, type StepPlace } from "../../rule/index.js";
+import { unreadableOption } from "../refusals.js";
+import { type InputValues, inputColumns } from "../setting/input-columns.js";
+import { constantsBySlot, type InitialValues, initialVector } from "../setting/setting.js";
+import { namedValues, refuseOutsideRange } from "../setting/valid-range.js";
 
 export interface PathOptions {
   /** By constant; those the rule holds fixed may be left out. */

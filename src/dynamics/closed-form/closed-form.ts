@@ -1,15 +1,15 @@
-import { formula, type Rule } from "../rule/index.js";
-import { fromDecimal } from "./exact/rational.js";
-import { type GuaranteedDigits, guaranteedDigits } from "./guaranteed-digits.js";
-import { type HeldSetting, type HeldStep, holdStep } from "./held-step.js";
-import { type ClosedTerm, closedTerms, termsAt } from "./linear/closed-terms.js";
-import { linearStep } from "./linear/exact-matrix.js";
-import type { ClosedRoot } from "./linear/polynomial-roots.js";
-import { termsText } from "./linear/term-text.js";
-import { path } from "./path.js";
-import { noClosedForm } from "./refusals.js";
-import { type InitialValues, initialVector } from "./setting.js";
-import { namedValues, refuseOutsideRange } from "./valid-range.js";
+import { formula, type Rule } from "../../rule/index.js";
+import { fromDecimal } from "../exact/rational.js";
+import { type GuaranteedDigits, guaranteedDigits } from "../path/guaranteed-digits.js";
+import { path } from "../path/path.js";
+import { noClosedForm } from "../refusals.js";
+import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.js";
+import { type InitialValues, initialVector } from "../setting/setting.js";
+import { namedValues, refuseOutsideRange } from "../setting/valid-range.js";
+import { type ClosedTerm, closedTerms, termsAt } from "./closed-terms.js";
+import { linearStep } from "./exact-matrix.js";
+import type { ClosedRoot } from "./polynomial-roots.js";
+import { termsText } from "./term-text.js";
 
 export interface ClosedFormOptions extends HeldSetting {
   readonly initial?: InitialValues;

@@ -1,5 +1,5 @@
-import { formula, type Rule } from "../rule/index.js";
-import { outsideRange } from "./refusals.js";
+import { formula, type Rule } from "../../rule/index.js";
+import { outsideRange } from "../refusals.js";
 
 /** Values by name as the formulas of the catalogue read them: constants, and N0 for the first value of N. */
 export function namedValues(

@@ -1,8 +1,8 @@
-import type { Rule } from "../rule/index.js";
-import { type Equilibrium, equilibria } from "./equilibria.js";
-import { type HeldSetting, holdStep } from "./held-step.js";
-import { path } from "./path.js";
-import { oneStateOnly } from "./refusals.js";
+import type { Rule } from "../../rule/index.js";
+import { path } from "../path/path.js";
+import { oneStateOnly } from "../refusals.js";
+import { type Equilibrium, equilibria } from "../rest/equilibria.js";
+import { type HeldSetting, holdStep } from "../setting/held-step.js";
 
 export interface CobwebOptions extends HeldSetting {
   readonly initial: Readonly<Record<string, number>>;

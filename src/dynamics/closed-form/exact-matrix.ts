@@ -1,7 +1,7 @@
 import { isLinearInStates, type Rule, stepOver } from "../../rule/index.js";
 import { fromDecimal, type Rational, rational } from "../exact/rational.js";
 import { rationalAlgebra } from "../exact/rational-algebra.js";
-import type { HeldStep } from "../held-step.js";
+import type { HeldStep } from "../setting/held-step.js";
 
 /** A step x' = A x + b in exact fractions: A [width][width], b [width]. */
 export interface LinearStep {

@@ -1,8 +1,8 @@
-import { encloseStep, type Interval, type Rule } from "../rule/index.js";
+import { encloseStep, type Interval, type Rule } from "../../rule/index.js";
+import { type HeldSetting, type HeldStep, holdStep, settled } from "../setting/held-step.js";
+import { type SearchRange, searchRanges } from "../setting/search-range.js";
 import { enclosedRoots } from "./enclosed-roots.js";
-import { type HeldSetting, type HeldStep, holdStep, settled } from "./held-step.js";
 import { type Multiplier, multipliersOf } from "./multiplier.js";
-import { type SearchRange, searchRanges } from "./search-range.js";
 import { settleByNewton } from "./settle-by-newton.js";
 import { spreadPoints } from "./spread-points.js";
 import { type Stability, stabilityOf } from "./stability.js";

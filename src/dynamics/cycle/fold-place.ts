@@ -1,5 +1,5 @@
+import type { HeldStep } from "../setting/held-step.js";
 import { orbit } from "./cycle-points.js";
-import type { HeldStep } from "./held-step.js";
 
 /**
  * Where two cycles of a period meet and vanish: solves f^p(x) = x and slope = 1 together for x and the constant,

@@ -1,5 +1,5 @@
-import type { Rule } from "../rule/index.js";
-import { missingValue, notFinite, strangeName, wrongHistory } from "./refusals.js";
+import type { Rule } from "../../rule/index.js";
+import { missingValue, notFinite, strangeName, wrongHistory } from "../refusals.js";
 
 /** By state: its first value, or its first values oldest first where the rule reads past ones. */
 export type InitialValues = Readonly<Record<string, number | readonly number[]>>;

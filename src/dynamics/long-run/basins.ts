@@ -1,8 +1,8 @@
-import { normalCdf } from "../numeric/index.js";
-import type { Interval, Rule } from "../rule/index.js";
-import { orbit } from "./cycle-points.js";
-import { type HeldSetting, type HeldStep, holdStep } from "./held-step.js";
-import { oneStateOnly, unreadableOption } from "./refusals.js";
+import { normalCdf } from "../../numeric/index.js";
+import type { Interval, Rule } from "../../rule/index.js";
+import { orbit } from "../cycle/cycle-points.js";
+import { oneStateOnly, unreadableOption } from "../refusals.js";
+import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.js";
 
 export interface BasinsOptions extends HeldSetting {
   /** First values to look at. */

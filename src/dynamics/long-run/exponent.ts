@@ -1,8 +1,8 @@
-import { studentQuantile } from "../numeric/index.js";
-import type { Rule } from "../rule/index.js";
-import { type HeldSetting, type HeldStep, holdStep } from "./held-step.js";
-import { pathLeaves, unreadableOption } from "./refusals.js";
-import { type InitialValues, initialVector } from "./setting.js";
+import { studentQuantile } from "../../numeric/index.js";
+import type { Rule } from "../../rule/index.js";
+import { pathLeaves, unreadableOption } from "../refusals.js";
+import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.js";
+import { type InitialValues, initialVector } from "../setting/setting.js";
 
 export interface ExponentOptions extends HeldSetting {
   readonly initial?: InitialValues;

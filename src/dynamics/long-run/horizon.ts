@@ -1,5 +1,5 @@
+import { unreadableOption } from "../refusals.js";
 import { type Exponent, type ExponentOptions, exponent } from "./exponent.js";
-import { unreadableOption } from "./refusals.js";
 
 export interface HorizonOptions extends ExponentOptions {
   /** Uncertainty of the first value, in its unit. */

@@ -1,10 +1,10 @@
-import type { Interval, Rule } from "../rule/index.js";
+import type { Interval, Rule } from "../../rule/index.js";
+import { oneStateOnly, unreadableOption } from "../refusals.js";
+import { type Multiplier, multipliersOf } from "../rest/multiplier.js";
+import { type Stability, stabilityOf } from "../rest/stability.js";
+import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.js";
+import { type SearchRange, searchRanges } from "../setting/search-range.js";
 import { cyclesOfOneState } from "./cycle-points.js";
-import { type HeldSetting, type HeldStep, holdStep } from "./held-step.js";
-import { type Multiplier, multipliersOf } from "./multiplier.js";
-import { oneStateOnly, unreadableOption } from "./refusals.js";
-import { type SearchRange, searchRanges } from "./search-range.js";
-import { type Stability, stabilityOf } from "./stability.js";
 
 /** Values that come round again after a number of periods, and not before. */
 export interface Cycle extends Stability {

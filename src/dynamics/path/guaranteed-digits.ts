@@ -1,6 +1,6 @@
-import { type Interval, intervalAlgebra, type PlaceOver, type Rule, stepOver } from "../rule/index.js";
-import { type HeldSetting, holdStep } from "./held-step.js";
-import { type InitialValues, initialVector } from "./setting.js";
+import { type Interval, intervalAlgebra, type PlaceOver, type Rule, stepOver } from "../../rule/index.js";
+import { type HeldSetting, holdStep } from "../setting/held-step.js";
+import { type InitialValues, initialVector } from "../setting/setting.js";
 
 export interface GuaranteedOptions extends HeldSetting {
   readonly initial?: InitialValues;

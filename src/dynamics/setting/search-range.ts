@@ -1,5 +1,5 @@
-import type { Interval, Rule } from "../rule/index.js";
-import { strangeName, unreadableOption } from "./refusals.js";
+import type { Interval, Rule } from "../../rule/index.js";
+import { strangeName, unreadableOption } from "../refusals.js";
 
 /** Lowest and highest value to look at: for a rule of one state a pair, otherwise by state. */
 export type SearchRange = Interval | Readonly<Record<string, Interval>>;

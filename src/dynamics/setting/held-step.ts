@@ -1,5 +1,5 @@
-import { compileRule, inputReach, type Rule, readsPeriod } from "../rule/index.js";
-import { changesWithTime } from "./refusals.js";
+import { compileRule, inputReach, type Rule, readsPeriod } from "../../rule/index.js";
+import { changesWithTime } from "../refusals.js";
 import { constantsBySlot, heldInputs } from "./setting.js";
 
 /** Constants, and inputs held at one value, for questions about the long run. */

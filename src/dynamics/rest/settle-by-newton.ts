@@ -1,5 +1,5 @@
 import { Matrix, solve } from "ml-matrix";
-import { type HeldStep, settled } from "./held-step.js";
+import { type HeldStep, settled } from "../setting/held-step.js";
 
 /** Slopes of the next present values by settled present values [states, states], and the gap to rest. */
 function linearisedGap(held: HeldStep, present: Float64Array): { gap: Float64Array; slopes: Matrix } {

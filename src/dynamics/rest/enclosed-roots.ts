@@ -1,5 +1,5 @@
-import { findRoot } from "../numeric/index.js";
-import type { Interval, StepEnclosure } from "../rule/index.js";
+import { findRoot } from "../../numeric/index.js";
+import type { Interval, StepEnclosure } from "../../rule/index.js";
 
 /** Roots found by a search that can lose none. */
 export interface EnclosedRoots {

@@ -1,7 +1,7 @@
-import { compileRule, type Rule, readsPeriod } from "../rule/index.js";
-import { type HeldSetting, holdStep } from "./held-step.js";
-import { changesWithTime, strangeName, unreadableOption } from "./refusals.js";
-import { initialVector } from "./setting.js";
+import { compileRule, type Rule, readsPeriod } from "../../rule/index.js";
+import { changesWithTime, strangeName, unreadableOption } from "../refusals.js";
+import { type HeldSetting, holdStep } from "../setting/held-step.js";
+import { initialVector } from "../setting/setting.js";
 
 export interface AttractorOptions extends Omit<HeldSetting, "inputs"> {
   /** The constant that is varied. */
