@@ -1,5 +1,6 @@
 import { nearestNames } from "../numeric/index.js";
 import type { Decision } from "./decisions/decision.js";
+import { packed } from "./packed.js";
 import { doubledColumn, missingColumn, unevenColumns } from "./refusals.js";
 
 /** One column of a record: any cells, or numbers with NaN where a cell is empty. */
@@ -43,7 +44,7 @@ export function tableOf(columns: Readonly<Record<string, ArrayLike<unknown>>>): 
     names,
     columns: names.map((name) => {
       const column = columns[name]!;
-      return column instanceof Float64Array ? column : Array.from(column);
+      return column instanceof Float64Array ? column : packed(Array.from(column));
     }),
   };
 }

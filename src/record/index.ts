@@ -21,8 +21,9 @@ export type {
   StepLength,
 } from "./observations.js";
 export { observations } from "./observe.js";
+export { packed } from "./packed.js";
 export type { CalendarName } from "./period/calendar.js";
-export { packed, tableOfRows } from "./table-of-rows.js";
+export { tableOfRows } from "./table-of-rows.js";
 export { type FillOptions, filled } from "./tables/filled.js";
 export type { PeriodsOf } from "./tables/placed-series.js";
 export { type ShiftOptions, shifted } from "./tables/shifted.js";

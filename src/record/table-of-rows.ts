@@ -1,4 +1,5 @@
-import type { Column, ColumnTable } from "./column-table.js";
+import type { ColumnTable } from "./column-table.js";
+import { packed } from "./packed.js";
 
 /**
  * A table of row objects. A row that lacks a key has a missing value there, and the order of keys within a row
@@ -12,21 +13,4 @@ export function tableOfRows(rows: readonly object[]): ColumnTable {
       column.push(Object.hasOwn(row, name) ? (row as Record<string, unknown>)[name] : null);
   }
   return { names: [...columns.keys()], columns: [...columns.values()].map(packed) };
-}
-
-/** A column of numbers and empty cells as numbers with NaN where a cell is empty; any other as it is. */
-export function packed(cells: readonly unknown[]): Column {
-  const values = new Float64Array(cells.length);
-  for (let i = 0; i < cells.length; i++) {
-    const cell = cells[i];
-    if (typeof cell === "number" || isSafeWhole(cell)) values[i] = Number(cell);
-    else if (cell === null || cell === undefined) values[i] = Number.NaN;
-    else return cells;
-  }
-  return values;
-}
-
-/** A whole number written as a bigint that a double keeps. */
-function isSafeWhole(cell: unknown): boolean {
-  return typeof cell === "bigint" && Number.isSafeInteger(Number(cell));
 }

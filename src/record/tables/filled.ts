@@ -1,9 +1,9 @@
 import { type Column, type ColumnTable, columnNamed, isEmpty } from "../column-table.js";
 import { numberColumn } from "../number-column.js";
+import { packed } from "../packed.js";
 import { momentText } from "../period/calendar-date.js";
 import type { PeriodAxis } from "../period/period-axis.js";
 import { optionWrong } from "../refusals.js";
-import { packed } from "../table-of-rows.js";
 import { type PeriodsOf, type PlacedTable, placed } from "./placed-series.js";
 
 /** How a missing value is filled: the one before it, a line between its neighbours, or a number. */

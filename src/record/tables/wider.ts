@@ -1,6 +1,6 @@
 import { type Column, type ColumnTable, columnNamed, isEmpty, rowCount } from "../column-table.js";
 import { decided } from "../decisions/correct.js";
-import { packed } from "../table-of-rows.js";
+import { packed } from "../packed.js";
 import { twoCells } from "./refusals.js";
 
 /** How a long table becomes a wide one. */
