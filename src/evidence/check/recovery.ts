@@ -78,12 +78,11 @@ function squaresAttempt(fit: Fit, group: GroupFit): Attempt | undefined {
   const { at } = again;
   const draw = recordDrawer(fit, again, group.sigma);
   const values = new Float64Array(again.recorded.length);
-  const free = fit.options.cut === "chi-square" ? 0 : at.length;
   return (stream) => {
     if (!draw(stream, values)) return undefined;
     const { estimates, stop, sumOfSquares } = again.minimise(at);
     if (stop.kind === "failed") return undefined;
-    const most = sumOfSquares * (1 + group.cut / (again.rows.count - free));
+    const most = sumOfSquares * (1 + group.cut / (again.rows.count - at.length));
     const held = (i: number): number => again.minimiseHeld(estimates, i, at[i]!).sumOfSquares;
     return { estimates: Array.from(estimates), holds: Array.from(at, (_, i) => held(i) <= most) };
   };
