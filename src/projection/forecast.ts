@@ -19,8 +19,8 @@ export interface Forecast {
  * Carries a fit forward: the path at the estimates, and bands from drawn constants without (`mean path`) and with
  * (`future observation`) the errors of single values.
  *
- * Constants are drawn from a multivariate t around the estimates, or along the profile where the record leaves one
- * open. With errors in the observation the rule runs from its initial state and the reading's error is added on top;
+ * Constants are drawn from a multivariate t around the estimates, sigma with them, or along the profile where the
+ * record leaves one open. With errors in the observation the rule runs from its initial state and the reading's error is added on top;
  * with errors in the process it runs from the last recorded value and every step has its own error.
  *
  * A rule whose nearby paths part (positive Lyapunov exponent) keeps its point path only up to the horizon of
