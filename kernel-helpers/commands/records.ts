@@ -48,8 +48,9 @@ export async function readRecord(path: string, options: ReadOptions = {}): Promi
  * Writes a record, or the tables of any result, to a file: CSV, TSV, Excel, Parquet, JSON or a DuckDB file, by
  * the ending of its name. A workbook takes every table of a result, a sheet each.
  *
- * Every double comes back the same; a missing cell is left empty; a text is quoted where it must be. The file is
- * written whole or not at all.
+ * Every double comes back the same; a missing cell is left empty; a text is quoted where it must be. A text that
+ * begins with = is written as it is: a workbook keeps it a text, a spreadsheet program that opens a CSV may not. The
+ * file is written whole or not at all.
  *
  * @throws {ModelError} `format-unknown` | `not-writable` | `not-a-record`.
  * @example await writeRecord(fit(rule, counts, { errors: "process" }), "crowding.xlsx");

@@ -145,6 +145,22 @@ describe("a delimited file", () => {
     ]);
   });
 
+  test("finds the bad cell far behind the first rows, where the engine has refused the file", async () => {
+    const rows = Array.from({ length: 9000 }, (_, i) => `${i},${i === 8499 ? "x9" : i + 0.5}`);
+    const table = await read(`week,coils\n${rows.join("\n")}\n`);
+    expect(table.columns[1]![8499]).toBe("x9");
+    expect(table.columns[1]![8500]).toBe(8500.5);
+    expect(table.source.found).toEqual([
+      '"coils" is a column of numbers, but row 8500 holds "x9": kept as text.',
+    ]);
+    const ragged = [...rows.slice(0, 8000), "8000", ...rows.slice(8001)];
+    expect(await refused(`week,coils\n${ragged.join("\n")}\n`)).toMatch(
+      /^ragged-row: Row 8001 \(line 8002\)/,
+    );
+    const long = [...rows.slice(0, 8499), "8499,12345678901234567", ...rows.slice(8500)];
+    expect((await read(`week,coils\n${long.join("\n")}\n`)).columns[1]![8499]).toBe("12345678901234567");
+  });
+
   test("leaves codes as text: leading zeros and more digits than a number keeps", async () => {
     expect(await columns("item,id\n007,12345678901234567\n012,2\n")).toEqual({
       item: ["007", "012"],
