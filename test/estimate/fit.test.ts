@@ -246,3 +246,16 @@ test("a fit that sits where the rule bends says so", () => {
   const smooth = stop.kind === "converged" && stop.test === "gradient";
   expect(warnings.some(({ code }) => code === "on-a-bend")).toBe(!smooth);
 });
+
+test("a censored fit is that of least squares where next to nothing is censored", () => {
+  // One value far above everything, known to be above a limit that the curve passes by far: it says nothing.
+  const plain = fit(sheltered, record({ N: values }), { errors: "observation" });
+  const marks = Int8Array.from([...values.map(() => 0), 1]);
+  const censored = fit(sheltered, record({ N: [...values, 1] }, { censoring: { N: marks } }), {
+    errors: "observation",
+  });
+  near(of(censored, "K").value, of(plain, "K").value, 1e-5);
+  // n counts the value that says nothing, so the ends agree to about 1/n of their distance.
+  const width = ({ profile }: Estimate): number => profile.upper! - profile.lower!;
+  near(width(of(censored, "K")), width(of(plain, "K")), 0.1);
+});

@@ -6,7 +6,7 @@ import { criteriaOf } from "../result/criteria.js";
 import { describeFit } from "../result/describe-fit.js";
 import type { GroupFit } from "../result/group-fit.js";
 import type { FitRows } from "../rows/fit-rows.js";
-import { likelihoodCut } from "../search/cut.js";
+import { likelihoodCut, normalLikelihoodCut } from "../search/cut.js";
 import { likelihoodObjective } from "../search/likelihood-objective.js";
 import { optimum } from "../search/optimum.js";
 import { startingPoints } from "../search/starting-points.js";
@@ -29,17 +29,18 @@ export function likelihoodFit(rule: Rule, group: ObservedGroup, options: FitOpti
   const unknowns = unknownsOf(rule, options, likelihood.spreads);
   const { rows } = prepared(rule, group, unknowns, options);
   const minusTwice = minusTwiceLogLikelihood(rule, group, rows, unknowns, likelihood);
+  const normal = likelihood.spreads[0] === "sigma";
   const found = optimum(
     likelihoodObjective(minusTwice, unknowns),
     unknowns,
     starts.map((start) => withSpread(start, rows, unknowns, options)),
-    () => likelihoodCut(options),
+    () => (normal ? normalLikelihoodCut(rows.count, plain.names.length, options) : likelihoodCut(options)),
     options.intervals !== "none",
   );
   const spread = unknowns.roles.indexOf("spread");
   return describeFit(rule, group, options, unknowns, rows, found, {
     criteria: criteriaOf(-0.5 * found.value, rows.count, unknowns.names.length),
-    sigma: likelihood.spreads[0] === "sigma" ? Math.sqrt(found.at[spread]!) : undefined,
+    sigma: normal ? Math.sqrt(found.at[spread]!) : undefined,
     exact: false,
   });
 }

@@ -61,6 +61,11 @@ function spreadSentence({ spread = "constant" }: FitOptions): string {
 function intervalSentence(options: FitOptions, groups: readonly GroupFit[]): string {
   const spreads = groups.some((group) => group.estimates.some(({ role }) => role === "spread"));
   const likelihood = spreads || options.spread === "poisson" || typeof options.spread === "object";
+  const normal = groups.some((group) =>
+    group.estimates.some(({ name, role }) => role === "spread" && name === "sigma"),
+  );
+  if (normal && options.cut !== "chi-square" && (options.groups ?? "separate") === "separate")
+    return "Standard errors by the curvature of the log-likelihood; profile cut n ln(1 + F(1, n - p)/(n - p)), that of least squares; AICc counts every unknown.";
   if (likelihood)
     return "Standard errors by the curvature of the log-likelihood; profile cut chi-square(1); AICc counts every unknown.";
   const cut =

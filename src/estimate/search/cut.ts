@@ -30,6 +30,20 @@ export function likelihoodCut(options: FitOptions): Cut {
   return { variance: 1, cut, firmCut };
 }
 
+/**
+ * The critical values of twice a negative log-likelihood of normal errors whose sigma is found with the rest: those of
+ * least squares, n ln(1 + F/(n - p)), so that a record with few censored values is judged as one with none.
+ *
+ * @param free - unknowns besides sigma.
+ */
+export function normalLikelihoodCut(count: number, free: number, options: FitOptions): Cut {
+  if (options.cut === "chi-square") return likelihoodCut(options);
+  const left = count - free;
+  const critical = (level: number): number => count * Math.log1p(fQuantile(level, 1, left) / left);
+  const [cut, firmCut] = levels(options).map(critical) as [number, number];
+  return { variance: 1, cut, firmCut };
+}
+
 function levels({ level = 0.95 }: FitOptions): readonly [number, number] {
   return [level, (1 + level) / 2];
 }
