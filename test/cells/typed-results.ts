@@ -3,13 +3,17 @@
 import { DataFrame } from "danfojs-node";
 import {
   compare,
+  equilibria,
   fit,
   forecast,
   leastSquares,
+  matrixGrowth,
   observations,
+  path,
   reaches,
   readRecord,
   recurrence,
+  rules,
 } from "periodwise";
 
 const counts = observations(
@@ -53,15 +57,32 @@ async function table(): Promise<DataFrame> {
   return new DataFrame([[rows, shapeIsNoText]]);
 }
 
+const stages = rules.ages({ ages: 3 });
+const dominant: number = matrixGrowth(stages, {
+  constants: { f1: 0, f2: 4, f3: 3, s1: 0.5, s2: 0.25 },
+}).dominant;
+const verdict: "stable" | "unstable" | "undetermined" = equilibria(rule, { constants: { R: 2, K: 9 } })
+  .points[0]!.verdict;
+// @ts-expect-error: points are a list, not anything
+const levelsAreNoText: string = equilibria(rule, { constants: { R: 2, K: 9 } }).points;
+// @ts-expect-error: constants are a list of names
+const namesAreNoText: string = rules.logistic().constants;
+// @ts-expect-error: a path is asked for in periods
+path(stages, { steps: 3 });
+
 export {
   comparisonIsNoNumber,
   constants,
   constantsAreNoNumber,
+  dominant,
   estimate,
   estimatesAreNoText,
   fitIsNoText,
   kind,
+  levelsAreNoText,
+  namesAreNoText,
   sentence,
   sentenceIsNoNumber,
   table,
+  verdict,
 };
