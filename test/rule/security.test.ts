@@ -102,3 +102,25 @@ test("values handed in under inherited names do not count as given", () => {
   const rule = recurrence("N[t+1] = toString*N");
   expect(() => path(rule, { constants: {}, initial: { N: 1 }, periods: 1 })).toThrow(/"toString"/u);
 });
+
+test("where a host forbids generated code the interpreter serves, with the same numbers", () => {
+  const usual = compileRule(recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)"));
+  const makesFunctions = globalThis.Function;
+  const forbidding = (): never => {
+    throw new EvalError("Code generation from strings disallowed for this context");
+  };
+  const run = (compiled: typeof usual): Float64Array => {
+    const values = new Float64Array(21);
+    compiled.path(Float64Array.of(10), Float64Array.of(1.5, 1000), [], 0, 20, values);
+    return values;
+  };
+  const expected = run(usual);
+  try {
+    globalThis.Function = forbidding as unknown as FunctionConstructor;
+    const plain = compileRule(recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)"));
+    expect(plain.pathSums).toBeUndefined();
+    expect(run(plain)).toEqual(expected);
+  } finally {
+    globalThis.Function = makesFunctions;
+  }
+});
