@@ -46,13 +46,11 @@ function checkInputs(rule: Rule, group: ObservedGroup, options: FitOptions): voi
 
 /** The periods from which the fit takes a step. */
 function steppedPeriods(rule: Rule, group: ObservedGroup, options: FitOptions): readonly number[] {
-  const last = group.index[group.index.length - 1]!;
-  const all = Array.from({ length: last }, (_, period) => period);
-  if (options.errors !== "process") return all.filter((period) => period >= longestLag(rule));
+  const between = (first: number, end: number): number[] =>
+    Array.from({ length: Math.max(0, end - first) }, (_, k) => first + k);
+  if (options.errors !== "process") return between(longestLag(rule), group.index[group.index.length - 1]!);
   const { from, to } = recordedPairs(rule, group);
-  return all.filter((period) =>
-    Array.from(from).some((entry, pair) => group.index[entry]! <= period && period < group.index[to[pair]!]!),
-  );
+  return Array.from(from).flatMap((entry, pair) => between(group.index[entry]!, group.index[to[pair]!]!));
 }
 
 function checkState(group: ObservedGroup, state: string, options: FitOptions): void {
