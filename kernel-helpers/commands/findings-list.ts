@@ -38,7 +38,7 @@ export function countsSentence({ counts }: Observations): string {
 /** Period, step, whether levels or flows, and the order of events, in one line. */
 export function periodSentence(observations: Observations): string {
   const { column, step, calendar } = observations.period;
-  const counted = calendar ?? `${step.every} ${step.of}`;
+  const counted = calendar ?? (step.every === 1 ? `1 ${step.of}` : `${step.every} ${step.of}s`);
   const order = observations.order === "" ? "not stated" : observations.order;
   return `Period "${column}", one step is ${counted}; each value is a ${observations.measured}; order of events: ${order}.`;
 }
