@@ -14,6 +14,8 @@ export const compilerPath: string = load.resolve("@tslab/typescript-for-tslab", 
   paths: [converterPackage],
 });
 
+const heapSetting = "--heap-growing-percent=20";
+
 /** The compiler, and how to keep what Node made of its text for the next start. */
 export interface CompilerLibrary {
   readonly library: typeof ts;
@@ -27,10 +29,13 @@ export interface CompilerLibrary {
 export function compilerLibrary(): CompilerLibrary {
   // Every cell leaves a whole program of the compiler behind. By itself Node would let the heap double before it
   // tidies up old things. Set before the code is read, because kept code is bound to Node's settings.
-  setFlagsFromString("--heap-growing-percent=20");
+  setFlagsFromString(heapSetting);
   // Beyond ASCII it has characters only in comments (a test looks), and read so it takes half the memory.
   const text = readFileSync(compilerPath, "latin1");
-  const kept = join(cacheFolder(), `compiler-${process.version}-${process.arch}-${text.length}.bin`);
+  const settings = [process.version, process.arch, ...process.execArgv, heapSetting]
+    .join("")
+    .replace(/\W+/g, "-");
+  const kept = join(cacheFolder(), `compiler-${settings}-${text.length}.bin`);
   const cachedData = read(kept);
   const script = new Script(Module.wrap(text), {
     filename: compilerPath,
