@@ -70,7 +70,10 @@ function byScenario(ahead: Ahead, groups: readonly GroupReach[], question: Reach
 
 function scenarioWords(group: GroupReach, question: ReachQuestion): string {
   if (group.beginsPast) return "not at all, as it begins past it";
-  if (group.time === undefined) return `not by ${group.words.horizon}`;
+  const { never, neverError, draws, words } = group;
+  if (group.time === undefined && draws > 1 && never < 1)
+    return `by ${words.horizon} ${shareOfDraws(1 - never, neverError, draws)} only`;
+  if (group.time === undefined) return `not by ${words.horizon}`;
   return `${when(group, question, true)}${firstWords(group)}`;
 }
 
