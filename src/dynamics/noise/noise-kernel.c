@@ -15,26 +15,31 @@
 static const double TAIL = 3.6541528853610088;
 static const double AREA = 0.00492867323399;
 
-static uint64_t state[4];
+/* Kept in plain variables inside loops: an array whose place is handed on would live in memory. */
+typedef struct {
+  uint64_t a, b, c, d;
+} Words;
+
+static Words state;
 static double values[CAPACITY + 2];
 static double edge[LAYERS + 1], height[LAYERS + 1];
 static double widths[LAYERS];
 static uint64_t inside[LAYERS];
 
-uint64_t *state_place(void) { return state; }
+Words *state_place(void) { return &state; }
 double *values_place(void) { return values; }
 
 static inline uint64_t turned(uint64_t x, int k) { return (x << k) | (x >> (64 - k)); }
 
-static inline uint64_t bits(uint64_t s[4]) {
-  const uint64_t result = turned(s[0] + s[3], 23) + s[0];
-  const uint64_t t = s[1] << 17;
-  s[2] ^= s[0];
-  s[3] ^= s[1];
-  s[1] ^= s[2];
-  s[0] ^= s[3];
-  s[2] ^= t;
-  s[3] = turned(s[3], 45);
+static inline uint64_t bits(Words *s) {
+  const uint64_t result = turned(s->a + s->d, 23) + s->a;
+  const uint64_t t = s->b << 17;
+  s->c ^= s->a;
+  s->d ^= s->b;
+  s->b ^= s->c;
+  s->a ^= s->d;
+  s->c ^= t;
+  s->d = turned(s->d, 45);
   return result;
 }
 
@@ -110,22 +115,22 @@ void prepare(void) {
   }
 }
 
-static inline double part(uint64_t s[4]) { return ((double)(bits(s) >> 11) + 0.5) * 0x1p-53; }
+static double part(void) { return ((double)(bits(&state) >> 11) + 0.5) * 0x1p-53; }
 
-static double tail(uint64_t s[4]) {
+static double tail(void) {
   for (;;) {
-    const double x = -logarithm(part(s)) / TAIL, y = -logarithm(part(s));
+    const double x = -logarithm(part()) / TAIL, y = -logarithm(part());
     if (y + y > x * x) return TAIL + x;
   }
 }
 
 /* The rare case: the place lies beyond what is inside the layer for certain. */
-static __attribute__((noinline)) double beyond(uint64_t s[4], int layer, double x) {
+static __attribute__((noinline)) double beyond(int layer, double x) {
   for (;;) {
-    if (layer == 0) return tail(s);
-    const double y = height[layer] + part(s) * (height[layer + 1] - height[layer]);
+    if (layer == 0) return tail();
+    const double y = height[layer] + part() * (height[layer + 1] - height[layer]);
     if (y < exponential(-0.5 * x * x)) return x;
-    const uint64_t word = bits(s);
+    const uint64_t word = bits(&state);
     const uint64_t place = word >> 12;
     layer = word & 255;
     x = (double)place * widths[layer];
@@ -134,18 +139,22 @@ static __attribute__((noinline)) double beyond(uint64_t s[4], int layer, double 
 }
 
 void normals(int count) {
-  uint64_t s[4] = {state[0], state[1], state[2], state[3]};
+  Words s = state;
   for (int k = 0; k < count; k++) {
-    const uint64_t word = bits(s);
+    const uint64_t word = bits(&s);
     const int layer = word & 255;
     const uint64_t place = word >> 12;
     double x = (double)(int64_t)place * widths[layer];
-    if (__builtin_expect(place >= inside[layer], 0)) x = beyond(s, layer, x);
+    if (__builtin_expect(place >= inside[layer], 0)) {
+      state = s;
+      x = beyond(layer, x);
+      s = state;
+    }
     union { double value; uint64_t word; } u = {x};
     u.word |= (word & 256) << 55;
     values[k] = u.value;
   }
-  for (int k = 0; k < 4; k++) state[k] = s[k];
+  state = s;
 }
 
 /* exp(centre + sd z) for normal z. */
