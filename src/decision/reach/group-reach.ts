@@ -66,7 +66,7 @@ function wordsOf(
 ): Omit<GroupReach["words"], "recorded"> {
   const say = timeWords(group, periodUnit);
   const { time, firstPeriod, lower, upper } = rows;
-  const spread = lower === undefined || upper === undefined ? undefined : (upper - lower) / 4;
+  const spread = spreadOf(rows);
   return {
     time: time === undefined ? undefined : say.at(time, spread),
     firstPeriod: firstPeriod === undefined ? undefined : say.period(firstPeriod),
@@ -74,6 +74,12 @@ function wordsOf(
     upper: upper === undefined ? undefined : say.limit(upper, "upper", spread),
     horizon: say.period(group.index.length - 1),
   };
+}
+
+/** What stands for a standard error of the time: a quarter of the interval, or half of its known side. */
+function spreadOf({ time, lower, upper }: Rows): number | undefined {
+  if (lower !== undefined && upper !== undefined) return (upper - lower) / 4;
+  return time === undefined || lower === undefined ? undefined : (time - lower) / 2;
 }
 
 /** When the record itself first shows the value passed; undefined where it does so from its first row on. */
