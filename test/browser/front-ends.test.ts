@@ -55,6 +55,11 @@ describe.runIf(browserThere && frontEndsThere)(
         const seen = await seenFigures(page);
         expect(seen.slice(0, titles.length).map(({ title }) => title)).toEqual(titles);
         expect((await overflow(page)).texts).toEqual([]);
+        // The page's typesetter leaves alone what stands between two dollar signs.
+        await page.waitForTimeout(1000);
+        expect(
+          await page.locator(".pw-figure .MathJax, .pw-table .MathJax, .pw-figure mjx-container").count(),
+        ).toBe(0);
         expect({ errors, outside }).toEqual({ errors: [], outside: [] });
         await page.close();
       },
@@ -93,7 +98,7 @@ describe.runIf(browserThere && frontEndsThere)(
       expect(await untrusted.page.locator("img[src=x]").count()).toBe(0);
       expect(untrusted.errors.map(withoutStamp).filter((error) => !itself.has(error))).toEqual([]);
       await untrusted.page.close();
-    });
+    }, 180_000);
   },
 );
 
