@@ -1,9 +1,11 @@
-import { levenbergMarquardt } from "ml-levenberg-marquardt";
 import type { Fit } from "./fit.js";
 import { bySquares } from "./options/fit-options.js";
 import type { GroupFit } from "./result/group-fit.js";
 import { prepared } from "./systems/prepared.js";
 import { unknownsOf } from "./unknowns/unknowns.js";
+
+/** Loaded when first asked for: most sessions fit many rules before one is shown. */
+const otherSolver = (): typeof import("ml-levenberg-marquardt") => require("ml-levenberg-marquardt");
 
 /** What an independent solver says of a fit. */
 export interface SecondOpinion {
@@ -39,7 +41,7 @@ export function secondOpinion(fit: Fit, group: GroupFit): SecondOpinion {
   };
   const x = Array.from({ length: rows.count }, (_, i) => i);
   try {
-    const { parameterValues } = levenbergMarquardt({ x, y: x.map(() => 0) }, residuals, {
+    const { parameterValues } = otherSolver().levenbergMarquardt({ x, y: x.map(() => 0) }, residuals, {
       initialValues: start,
       errorTolerance: 0,
       maxIterations: 100,

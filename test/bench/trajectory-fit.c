@@ -195,8 +195,8 @@ int main(int count, char **arguments) {
   n = count - 1;
   for (int i = 0; i < n; i++) y[i] = atof(arguments[i + 1]);
   double least = INFINITY, b[P];
-  int calls = 0, fits = 20000;
-  for (int round = 0; round < 7; round++) {
+  int calls = 0, fits = 1000;
+  for (int round = 0; round < 60; round++) {
     struct timespec from, to;
     clock_gettime(CLOCK_MONOTONIC, &from);
     for (int i = 0; i < fits; i++) {

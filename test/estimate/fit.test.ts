@@ -1,6 +1,6 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import { type Estimate, type Fit, fit } from "../../src/estimate/index.js";
+import { type Estimate, type Fit, fit, secondOpinion } from "../../src/estimate/index.js";
 import { leastSquares, randomStream } from "../../src/numeric/index.js";
 import { recurrence } from "../../src/rule/index.js";
 import { record } from "./record.js";
@@ -258,4 +258,11 @@ test("a censored fit is that of least squares where next to nothing is censored"
   // n counts the value that says nothing, so the ends agree to about 1/n of their distance.
   const width = ({ profile }: Estimate): number => profile.upper! - profile.lower!;
   near(width(of(censored, "K")), width(of(plain, "K")), 0.1);
+});
+
+test("a second solver finds the same constants", () => {
+  const fitted = fit(sheltered, record({ N: values }), { errors: "observation" });
+  const { digits, sentence } = secondOpinion(fitted, fitted.groups[0]!);
+  expect(digits).toBeGreaterThanOrEqual(6);
+  expect(sentence).toMatch(/^A second solver \(ml-levenberg-marquardt\) agrees to \d+ digits\.$/);
 });

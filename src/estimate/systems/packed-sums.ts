@@ -28,8 +28,10 @@ export function packedSums(columns: Int32Array, width: number): PackedSums {
     triangle,
     projected,
     factor() {
-      for (let k = 0; k < gram.length; k++) gram[k] = sums[products[k]!]!;
-      for (let a = 0; a < size; a++) gradient[a] = sums[slopes[a]!]!;
+      for (let a = 0; a < size; a++) {
+        gradient[a] = sums[slopes[a]!]!;
+        for (let k = a * (size + 1); k < (a + 1) * size; k++) gram[k] = sums[products[k]!]!;
+      }
       return factorSums(gram, gradient, triangle, projected);
     },
   };
