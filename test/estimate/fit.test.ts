@@ -266,3 +266,16 @@ test("a second solver finds the same constants", () => {
   expect(digits).toBeGreaterThanOrEqual(6);
   expect(sentence).toMatch(/^A second solver \(ml-levenberg-marquardt\) agrees to \d+ digits\.$/);
 });
+
+test("two constants of which only the product is well known are named with it", () => {
+  // theta-logistic near its rest level: only r*theta, the slope there, is told by small departures from it.
+  const rule = recurrence("N[t+1] = N*exp(r*(1 - (N/100)^theta))");
+  const N = [92];
+  for (let t = 0; t < 14; t++) N.push(N[t]! * Math.exp(0.3 * (1 - N[t]! / 100)));
+  const read = N.map((value, t) => value + (t % 2 ? 0.02 : -0.02));
+  const { warnings } = fit(rule, record({ N: read }), { errors: "observation" }).groups[0]!;
+  const { message } = warnings.find(({ code }) => code === "strong-correlation")!;
+  expect(message).toMatch(
+    /^r and theta are hard to separate \(correlation -[01]\.\d+\): their product is known to /,
+  );
+});

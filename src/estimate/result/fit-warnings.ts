@@ -3,14 +3,13 @@ import { type Rule, roughness } from "../../rule/index.js";
 import type { FitOptions } from "../options/fit-options.js";
 import type { Optimum } from "../search/optimum.js";
 import type { Unknowns } from "../unknowns/unknowns.js";
+import { correlationWarnings } from "./correlation-warnings.js";
 import type { Estimate } from "./estimate-of.js";
 import type { GroupFit } from "./group-fit.js";
 import { slopeWarnings } from "./slope-warnings.js";
 
 /** Usable values a constant below which a fit carries a caution: common practice, no source. */
 const comfortable = 8;
-/** Correlation of two estimates above which they are named as hard to separate: common practice, no source. */
-const strong = 0.99;
 
 /** What a fit's warnings are drawn from. */
 export interface FitContext {
@@ -28,7 +27,7 @@ export function fitWarnings(fit: Omit<GroupFit, "warnings">, context: FitContext
     ...spreadsNotSeparated(fit),
     ...atBounds(fit, context.unknowns),
     ...rivals(fit),
-    ...correlated(fit),
+    ...correlationWarnings(fit),
     ...bends(fit, context.rule),
     ...slopeWarnings(fit, context),
     ...fewValues(fit),
@@ -117,23 +116,6 @@ function rivals(fit: Omit<GroupFit, "warnings">): Warning[] {
     },
   ];
 }
-
-function correlated(fit: Omit<GroupFit, "warnings">): Warning[] {
-  const size = fit.estimates.length;
-  const pairs = fit.estimates.flatMap((a, i) =>
-    fit.estimates.slice(i + 1).map((b, k) => [a, b, i, i + 1 + k] as const),
-  );
-  const entry = (i: number, j: number): number => fit.covariance[i * size + j]!;
-  return pairs
-    .map(([a, b, i, j]) => ({ a, b, correlation: entry(i, j) / Math.sqrt(entry(i, i) * entry(j, j)) }))
-    .filter(({ correlation }) => Math.abs(correlation) > strong)
-    .map(({ a, b, correlation }) => ({
-      code: "strong-correlation",
-      message: `${pair(a, b)} are hard to separate (correlation ${correlation.toFixed(3)}): their combination is known better than either.`,
-    }));
-}
-
-const pair = (a: Estimate, b: Estimate): string => `${a.name} and ${b.name}`;
 
 /** At a smooth optimum the search ends on its gradient; on a bend of the rule it cannot. */
 function bends(fit: Omit<GroupFit, "warnings">, rule: Rule): Warning[] {
