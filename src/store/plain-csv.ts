@@ -6,7 +6,7 @@ import { decimalSignOf } from "./number-form.js";
 import type { ReadOptions } from "./read-options.js";
 import { type Relation, selectedAs } from "./relation.js";
 
-const looked = 5000;
+const looked = 2000;
 
 type PlainKind = "number" | "text";
 
