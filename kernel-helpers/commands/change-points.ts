@@ -49,7 +49,7 @@ export function densityDependence(
 
 function breaksTable(looked: ChangePoint): Table {
   const { period } = looked.fit.observations;
-  const date = { kind: "number", digits: 6, unit: period.unit } as const;
+  const date = { kind: "number", digits: 6, unit: period.unit, grouped: false } as const;
   const percent = Math.round(100 * looked.level);
   return table({
     title: `One change in the constants of ${looked.fit.rule.text}`,

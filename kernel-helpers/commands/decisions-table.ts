@@ -13,14 +13,19 @@ export function decisionsTable(decisions: readonly Decision[]): Table {
       { key: "why", label: "Why", kind: "text" },
       { key: "who", label: "Who", kind: "text" },
     ],
-    rows: decisions.map((decision) => ({
-      ...decision,
-      column: decision.column || "whole row",
-      now: decision.now ?? "left out",
-    })),
+    rows: decisionRows(decisions),
     notes: decisions.length === 0 ? ["The record is used as it was read."] : [],
     format: { group: "" },
   });
+}
+
+/** The decisions log as rows, in the words in which it is shown. */
+export function decisionRows(decisions: readonly Decision[]): readonly Decision[] {
+  return decisions.map((decision) => ({
+    ...decision,
+    column: decision.column || "whole row",
+    now: decision.now ?? "left out",
+  }));
 }
 
 /** One decision as a line of the case's log. */

@@ -29,10 +29,11 @@ export function findingsList(findings: readonly Finding[]): object | undefined {
   }));
 }
 
-/** "25 rows read, 24 used, 2 flagged, 0 corrected, 1 refused." */
+/** "25 rows read, 24 used, 2 flagged, 0 corrected, 1 settled by an option, 1 refused." */
 export function countsSentence({ counts }: Observations): string {
-  const { read, used, flagged, corrected, refused } = counts;
-  return `${read} rows read, ${used} used, ${flagged} flagged, ${corrected} corrected, ${refused} refused.`;
+  const { read, used, flagged, corrected, settled = 0, refused } = counts;
+  const byOption = settled > 0 ? ` ${settled} settled by an option,` : "";
+  return `${read} rows read, ${used} used, ${flagged} flagged, ${corrected - settled} corrected,${byOption} ${refused} refused.`;
 }
 
 /** Period, step, whether levels or flows, and the order of events, in one line. */

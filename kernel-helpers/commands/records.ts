@@ -1,5 +1,6 @@
 import type { DataFrame } from "danfojs-node";
 import {
+  type ColumnTable,
   type Decision,
   type DifferenceOptions,
   type Differences,
@@ -7,20 +8,30 @@ import {
   type ObservationOptions,
   type Observations,
   observations as observe,
+  tableOfRows,
 } from "../../src/record/index.js";
-import { type ReadOptions, readTable, type WriteOptions, writeTables } from "../../src/store/index.js";
+import {
+  holdsSeveral,
+  type NamedTable,
+  type ReadOptions,
+  readTable,
+  type WriteOptions,
+  writeTables,
+} from "../../src/store/index.js";
 import {
   columnsOf,
+  marksFound,
   noteFrame,
   notesOf,
   type RecordLike,
   type Result,
+  shownTable,
   tablesOf,
   toFrame,
 } from "../dataframe/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
-import { decisionSentence } from "./decisions-table.js";
+import { decisionRows, decisionSentence } from "./decisions-table.js";
 import { differencesBundle } from "./show-differences.js";
 import { observationsBundle } from "./show-observations.js";
 
@@ -39,7 +50,8 @@ import { observationsBundle } from "./show-observations.js";
 export async function readRecord(path: string, options: ReadOptions = {}): Promise<DataFrame> {
   const table = await readTable(path, options);
   const frame = toFrame(table);
-  noteFrame(frame, { ...notesOf(frame), source: table.source });
+  const found = Object.freeze([...table.source.found, ...marksFound(table.names)]);
+  noteFrame(frame, { ...notesOf(frame), source: Object.freeze({ ...table.source, found }) });
   caseLog.noteRecord({ path, rows: table.source.rows, checksum: table.source.checksum });
   return frame;
 }
@@ -47,6 +59,10 @@ export async function readRecord(path: string, options: ReadOptions = {}): Promi
 /**
  * Writes a record, or the tables of any result, to a file: CSV, TSV, Excel, Parquet, JSON or a DuckDB file, by
  * the ending of its name. A workbook takes every table of a result, a sheet each.
+ *
+ * A corrected record is written as it is shown: the columns as they were read, beside them those of what is used
+ * instead, and which rows are left out. A workbook and a database file take the decisions log as well, as a table
+ * "decisions" (with `table`, "... decisions").
  *
  * Every double comes back the same; a missing cell is left empty; a text is quoted where it must be. A text that
  * begins with = is written as it is: a workbook keeps it a text, a spreadsheet program that opens a CSV may not. The
@@ -61,8 +77,21 @@ export async function writeRecord(
   options: WriteOptions = {},
 ): Promise<void> {
   const tables = tablesOf(record);
-  const named = tables.length === 1 ? [{ ...tables[0]!, name: options.table ?? "record" }] : tables;
+  const named = tables.length === 1 ? withDecisions(tables[0]!.table, path, options) : tables;
   await writeTables(named, path, options);
+}
+
+/** A record as it is shown, and its decisions log where the file has room for it. */
+function withDecisions(
+  record: ColumnTable,
+  path: string,
+  { format, table }: WriteOptions,
+): readonly NamedTable[] {
+  const { decisions = [] } = record;
+  const shown = { name: table ?? "record", table: shownTable(record) };
+  if (decisions.length === 0 || !holdsSeveral(path, format)) return [shown];
+  const name = table === undefined ? "decisions" : `${table} decisions`;
+  return [shown, { name, table: tableOfRows(decisionRows(decisions)) }];
 }
 
 /**

@@ -28,7 +28,7 @@ function reachTable(found: Reach): Table {
   const dated = found.groups.some((group) => !group.words.horizon.startsWith(found.periodUnit));
   const time = dated
     ? ({ kind: "text" } as const)
-    : ({ kind: "number", digits: 5, unit: found.periodUnit } as const);
+    : ({ kind: "number", digits: 5, unit: found.periodUnit, grouped: false } as const);
   const random = found.groups.some((group) => group.draws > 1);
   const grouped: Column[] = found.groups.length > 1 ? [{ key: "who", label: "Group", kind: "text" }] : [];
   return table({
@@ -109,6 +109,7 @@ function reachFigure(found: Reach): Figure {
 /** The answer to "what setting": one row a solution. */
 export function showSolved(found: Solved): readonly Table[] {
   const setting = { kind: "number", digits: 8, unit: found.unit } as const;
+  const without = "risk" in found.target ? "simulated" : "exact";
   return [
     table({
       title: `What ${found.unknown} must be`,
@@ -122,8 +123,8 @@ export function showSolved(found: Solved): readonly Table[] {
       ],
       rows: found.solutions.map((solution) => ({
         ...solution,
-        lower: solution.margin === undefined ? "exact" : (solution.margin.lower ?? "none"),
-        upper: solution.margin === undefined ? "exact" : (solution.margin.upper ?? "none"),
+        lower: solution.margin === undefined ? without : (solution.margin.lower ?? "none"),
+        upper: solution.margin === undefined ? without : (solution.margin.upper ?? "none"),
       })),
       notes: [found.sentence],
     }),
@@ -157,7 +158,7 @@ export function showNextReading(found: NextReading): readonly (Figure | Table)[]
     table({
       title: "The five times that are worth most",
       columns: [
-        { key: "time", label: "Time", kind: "number", digits: 6, unit: found.periodUnit },
+        { key: "time", label: "Time", kind: "number", digits: 6, unit: found.periodUnit, grouped: false },
         narrowing
           ? { key: "gain", label: gain, kind: "percent", digits: 1 }
           : { key: "gain", label: gain, kind: "number", digits: 3 },

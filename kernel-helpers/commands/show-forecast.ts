@@ -75,7 +75,7 @@ const several = (key: string, label: string, names: readonly string[]): readonly
 
 function aheadTable(ahead: Forecast): Table {
   const level = Math.max(...ahead.options.levels);
-  const each = Math.max(4, Math.floor(shownRows / (ahead.groups.length * ahead.fit.rule.states.length)));
+  const each = periodsShown(ahead.options.periods, ahead.groups.length * ahead.fit.rule.states.length);
   const rows = ahead.groups.flatMap((group) => rowsAhead(group, level, each));
   const dated = ahead.groups.some((group) => group.labels !== undefined);
   const unit = ahead.groups[0]?.states[0]?.unit ?? "";
@@ -88,7 +88,13 @@ function aheadTable(ahead: Forecast): Table {
       ...several("state", "State", ahead.fit.rule.states),
       dated
         ? { key: "time", label: ahead.fit.observations.period.column, kind: "text" }
-        : { key: "time", label: ahead.fit.observations.period.column, kind: "number", digits: 6 },
+        : {
+            key: "time",
+            label: ahead.fit.observations.period.column,
+            kind: "number",
+            digits: 6,
+            grouped: false,
+          },
       { key: "central", label: "Fitted path", ...number },
       { key: "meanLower", label: `Mean path ${percent}, from`, ...number },
       { key: "meanUpper", label: "to", ...number },
@@ -106,8 +112,15 @@ function aheadTable(ahead: Forecast): Table {
   });
 }
 
-/** Rows shown of all groups together. */
+/** Rows shown of all groups together where a forecast is long, and the most where all of a short one is shown. */
 const shownRows = 18;
+const mostRows = 48;
+
+/** How many periods ahead are shown of each series. */
+function periodsShown(periods: number, series: number): number {
+  if (periods <= 12 && periods * series <= mostRows) return periods;
+  return Math.max(4, Math.floor(shownRows / series));
+}
 
 function rowsAhead(group: GroupForecast, level: number, each: number): Readonly<Record<string, unknown>>[] {
   const present = group.index.indexOf(group.recordEnd);

@@ -46,7 +46,7 @@ function tableOf(run: Simulation): Table {
   const columns: Column[] = [
     ...(run.groups.length > 1 ? [{ key: "scenario", label: "Scenario", kind: "text" } as const] : []),
     ...(run.rule.states.length > 1 ? [{ key: "state", label: "State", kind: "text" } as const] : []),
-    { key: "period", label: run.options.period, kind: "integer" },
+    { key: "period", label: run.options.period, kind: "integer", grouped: false },
     { key: "central", label: "Without random change", ...number },
   ];
   if (random)

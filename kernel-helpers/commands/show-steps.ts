@@ -22,7 +22,7 @@ export function showPath(run: Path): readonly (Figure | Table)[] {
   const numbers = table({
     title: "Periods",
     columns: [
-      { key: "period", label: "Period", kind: "integer" },
+      { key: "period", label: "Period", kind: "integer", grouped: false },
       ...names.map((name): Column => ({ key: name, label: name, unit: unitOf(rule, name), ...number })),
     ],
     rows: periods.map((period, t) => ({
@@ -51,7 +51,7 @@ export function showExactPath(run: ExactPath): readonly Table[] {
     table({
       title: "Exact values",
       columns: [
-        { key: "period", label: "Period", kind: "integer" },
+        { key: "period", label: "Period", kind: "integer", grouped: false },
         ...states.map(
           (name): Column => ({ key: name, label: name, unit: unitOf(run.rule, name), kind: "text" }),
         ),

@@ -1,15 +1,9 @@
 import type { DataFrame } from "danfojs-node";
-import {
-  type Column,
-  type ColumnTable,
-  columnNamed,
-  decided,
-  packed,
-  rowCount,
-} from "../../src/record/index.js";
+import { type Column, type ColumnTable, rowCount } from "../../src/record/index.js";
 import { danfo } from "./danfo.js";
 import { noteFrame } from "./frame-notes.js";
 import { showFrames } from "./show-frames.js";
+import { shownTable } from "./shown-table.js";
 
 /**
  * A danfo DataFrame of a table. A missing number is NaN in the frame, because danfo's arithmetic counts null as
@@ -20,7 +14,7 @@ import { showFrames } from "./show-frames.js";
  * and the commands of this package still know it by the record's name.
  */
 export function toFrame(record: ColumnTable): DataFrame {
-  const table = withCorrected(record);
+  const table = shownTable(record);
   const names = frameNames(table.names);
   const dtypes = table.columns.map(kindOf);
   const rows = Array.from({ length: rowCount(table) }, (_, row) =>
@@ -34,21 +28,6 @@ export function toFrame(record: ColumnTable): DataFrame {
     ...(record.decisions && { decisions: record.decisions, raw: record.names.length }),
   });
   return frame;
-}
-
-/** Beside every column with a correction, a column of what is used instead; the raw one stays as it was read. */
-function withCorrected(table: ColumnTable): ColumnTable {
-  const names = [...new Set((table.decisions ?? []).map(({ column }) => column))].filter(
-    (name) => name !== "",
-  );
-  const used = decided(table);
-  return {
-    names: [...table.names, ...names.map((name) => `${name} (corrected)`)],
-    columns: [
-      ...table.columns,
-      ...names.map((name) => packed(Array.from(columnNamed(used, name, "a correction")))),
-    ],
-  };
 }
 
 /** danfo guesses a column's kind from its first rows; here every cell is asked. */

@@ -13,7 +13,8 @@ type Row = Readonly<Record<string, unknown>>;
  * @param decimals - for a column of plain numbers whose decimals are settled together.
  * @returns text with "-" for minus; `absent` for undefined, null and NaN.
  */
-export function cellText(column: Column, row: Row, format: NumberFormat, decimals?: number): string {
+export function cellText(column: Column, row: Row, signs: NumberFormat, decimals?: number): string {
+  const format = signsOf(column, signs);
   const value = row[column.key];
   if (value === undefined || value === null || Number.isNaN(value)) return absent;
   if (typeof value === "bigint") return written(wholeText(column, value, format), format);
@@ -25,6 +26,10 @@ export function cellText(column: Column, row: Row, format: NumberFormat, decimal
   if (value instanceof Date) return value.toISOString().slice(0, 10);
   if (column.kind === "money" && /^-?\d+(\.\d+)?$/.test(String(value))) return written(String(value), format);
   return String(value);
+}
+
+function signsOf({ grouped = true }: Column, format: NumberFormat): NumberFormat {
+  return grouped ? format : { ...format, group: "" };
 }
 
 function wholeText(column: Column, value: bigint, format: NumberFormat): string {

@@ -25,6 +25,8 @@ export interface Column {
   readonly unit?: string;
   readonly kind: ColumnKind;
   readonly digits?: number;
+  /** False: digits are not set apart in thousands, as in a year; default true. */
+  readonly grouped?: boolean;
   /** Key of the standard error (estimate) or Monte-Carlo error (probability) that says how many digits count. */
   readonly pairedWith?: string;
 }

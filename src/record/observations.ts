@@ -72,6 +72,8 @@ export interface Observations {
     readonly used: number;
     readonly flagged: number;
     readonly corrected: number;
+    /** Of those corrected, rows that an option settled and no correction names; absent where there is none. */
+    readonly settled?: number;
     readonly refused: number;
   };
 }

@@ -4,6 +4,7 @@ import { checkValues } from "./checks/check-values.js";
 import { refuseMixedUnits } from "./checks/refuse-mixed-units.js";
 import { type ColumnTable, columnNamed, rowCount } from "./column-table.js";
 import { decided, rowsLeftOut } from "./decisions/correct.js";
+import type { Decision } from "./decisions/decision.js";
 import { type FindingLog, findingLog } from "./finding-log.js";
 import type { ObservationOptions } from "./observation-options.js";
 import type { Observations, ObservedGroup } from "./observations.js";
@@ -66,7 +67,11 @@ export function observations(table: ColumnTable, options: ObservationOptions): O
       checkValues({ group, state, values: group.values[state.name]!, measured, period: axis.column, log });
   }
   const standing = groups.reduce((sum, { used }) => sum + used, 0);
-  return assemble(kept, columns.states, axis, options, log, { read: taken.length, used: standing });
+  return assemble(kept, columns.states, axis, options, log, {
+    read: taken.length,
+    used: standing,
+    corrections: table.decisions ?? [],
+  });
 }
 
 /** Rows by increasing period; of one period in the record's order. */
@@ -112,10 +117,16 @@ function assemble(
   axis: PeriodAxis,
   options: ObservationOptions,
   log: FindingLog,
-  { read, used }: { readonly read: number; readonly used: number },
+  {
+    read,
+    used,
+    corrections,
+  }: { readonly read: number; readonly used: number; readonly corrections: readonly Decision[] },
 ): Observations {
   const { step, name } = axis.calendar;
   const decisions = log.decisions();
+  const corrected = new Set(decisions.map(({ row }) => row)).size;
+  const settled = corrected - new Set(corrections.map(({ row }) => row)).size;
   return Object.freeze({
     kind: "observations",
     groups: Object.freeze(groups),
@@ -131,7 +142,8 @@ function assemble(
       read,
       used,
       flagged: log.flagged(),
-      corrected: new Set(decisions.map(({ row }) => row)).size,
+      corrected,
+      ...(settled > 0 && { settled }),
       refused: read - used,
     }),
   });

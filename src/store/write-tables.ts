@@ -2,6 +2,7 @@ import { randomUUID } from "node:crypto";
 import { copyFile, rename, rm, stat } from "node:fs/promises";
 import { basename, dirname, join, resolve } from "node:path";
 import { formatOfEnding } from "./format-of-ending.js";
+import { holdsSeveral } from "./holds-several.js";
 import type { Format } from "./read-options.js";
 import { formatUnknown, notWritable } from "./refusals.js";
 import { writeCsv } from "./write-csv.js";
@@ -34,7 +35,7 @@ export async function writeTables(
 ): Promise<void> {
   const format = options.format ?? formatOfEnding(path);
   if (format === undefined) throw formatUnknown(path, Object.keys(writers));
-  if (tables.length > 1 && format !== "excel" && format !== "duckdb")
+  if (tables.length > 1 && !holdsSeveral(path, format))
     throw notWritable(
       path,
       `there are ${tables.length} tables and the file holds one`,
