@@ -1,6 +1,8 @@
 import { numberFormat, significant as toDigits } from "../tables/index.js";
 
-/** A number in a sentence about a figure: four significant digits, in the number format in force. */
+/** A number in a sentence about a figure: four significant digits, in the number format in force; infinity as a word. */
 export function significant(value: number): string {
+  if (value === Number.POSITIVE_INFINITY) return "infinity";
+  if (value === Number.NEGATIVE_INFINITY) return "minus infinity";
   return toDigits(value, 4, numberFormat());
 }

@@ -124,6 +124,20 @@ export function refuseNoTarget(aim: number | undefined): ModelError {
   );
 }
 
+export function refuseRiskTarget(aim: number): ModelError {
+  const hint = aim > 1 && aim <= 100 ? `: write ${aim / 100} for ${aim}%` : `; ${aim} was given`;
+  return new ModelError("risk-outside", `A risk is from 0 to 1${hint}.`, { aim });
+}
+
+/** @param past - what is past, as a clause. */
+export function refusePastAlready(past: string): ModelError {
+  return new ModelError(
+    "past-already",
+    `No setting changes when it gets there: ${past}. Ask for another { value }, or the other { direction }.`,
+    { past },
+  );
+}
+
 export function refuseNoObjective(): ModelError {
   return new ModelError(
     "no-objective",

@@ -61,12 +61,13 @@ function projected(
   const index = Array.from({ length: periods + 1 }, (_, t) => from + t);
   const step = observations.period.step.every;
   const labels = periodLabels(observations, ground.recorded, index);
+  const time = index.map((t) => ground.recorded.time[0]! + t * step);
   return {
     group: group.group,
     scenario: scenario.name,
     plans: scenario.plans,
     index,
-    time: index.map((t) => ground.recorded.time[0]! + t * step),
+    time,
     ...(labels && { labels }),
     recordEnd,
     states: rule.states.map((state, s) => ({
@@ -90,7 +91,9 @@ function projected(
     warnings: forecastWarnings({
       group,
       starts,
-      central,
+      central: { ...central, values: shown },
+      scenario: scenario.name,
+      period: (row) => labels?.[row] ?? `${observations.period.unit} ${Number(time[row]!.toPrecision(6))}`,
       left,
       predictability,
       ground,

@@ -5,6 +5,7 @@ import type { DrawnStarts } from "./constants/drawn-starts.js";
 import type { FitGround } from "./fit-ground.js";
 import type { Predictability } from "./predictability.js";
 import { rangeWarnings } from "./range-warnings.js";
+import { recordedSignWarnings } from "./recorded-sign.js";
 
 /** What the warnings are read from. */
 export interface WarningSource {
@@ -14,6 +15,10 @@ export interface WarningSource {
   readonly central: CentralPath;
   readonly left: number;
   readonly predictability: Predictability | undefined;
+  /** "" for the only one. */
+  readonly scenario: string;
+  /** A row's period in words. */
+  readonly period: (row: number) => string;
   /** Periods asked for beyond the record. */
   readonly asked: number;
 }
@@ -28,6 +33,7 @@ export function forecastWarnings(source: WarningSource): Warning[] {
     ...openConstants(source),
     ...discardedDraws(starts),
     ...rangeWarnings(central, ground.from, left, starts.paths),
+    ...recordedSignWarnings(source),
     ...beyondRecord(source),
     ...partingPaths(source.predictability),
   ];

@@ -17,4 +17,5 @@ export { ruleNoise } from "./noise/rule-noise.js";
 export type { PathDraws } from "./path-draws.js";
 export type { Predictability } from "./predictability.js";
 export type { GroupForecast, ProjectedState } from "./projected-group.js";
+export { recordedSignWarnings } from "./recorded-sign.js";
 export { type SimulateOptions, type Simulation, simulate } from "./simulate.js";

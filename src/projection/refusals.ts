@@ -26,10 +26,15 @@ export function refuseLevel(level: number): ModelError {
   );
 }
 
-export function refuseFutureInput(inputs: readonly string[], periods: number): ModelError {
+/** @param recorded - how many of the first steps read what is recorded. */
+export function refuseFutureInput(inputs: readonly string[], periods: number, recorded: number): ModelError {
+  const why =
+    recorded <= 0
+      ? ""
+      : ` (the first ${recorded === 1 ? "step reads the last recorded value" : `${recorded} steps read recorded values`})`;
   return new ModelError(
     "future-input-missing",
-    `The rule needs ${inputs.join(", ")} for the next ${periods} periods; supply a scenario, such as inputs: { ${inputs[0]}: { usual: 0 } }.`,
+    `The rule needs ${inputs.join(", ")} for the next ${periods} ${periods === 1 ? "period" : "periods"}${why}; supply a scenario, such as inputs: { ${inputs[0]}: { usual: 0 } }.`,
     { inputs, periods },
   );
 }

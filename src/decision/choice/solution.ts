@@ -53,8 +53,10 @@ export interface Solved {
   /** The measure in words. */
   readonly measure: string;
   readonly between: readonly [number, number];
-  /** By increasing value; empty where nothing in the range meets the target. */
+  /** By increasing value; empty where nothing in the range meets the target, or everything does. */
   readonly solutions: readonly Solution[];
+  /** Whether every setting looked at meets the target; then the smallest and the largest measure found. */
+  readonly everywhere: readonly [number, number] | undefined;
   /** The nearest miss: a setting, and the measure there. */
   readonly nearest: { readonly value: number; readonly achieved: number };
   readonly level: number;

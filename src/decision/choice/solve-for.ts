@@ -3,12 +3,21 @@ import type { Rule } from "../../rule/index.js";
 import { isRisk, type Measure, measureWords } from "../measure/measure.js";
 import { measureReader } from "../measure/read-measure.js";
 import { type Estimated, riskReader } from "../measure/read-risk.js";
-import { refuseBounds, refuseNoEffect, refuseNoRange, refuseNoTarget } from "../refusals.js";
+import {
+  refuseBounds,
+  refuseNoEffect,
+  refuseNoRange,
+  refuseNoTarget,
+  refusePastAlready,
+  refuseRiskTarget,
+} from "../refusals.js";
 import { type Setting, settingOf } from "../setting/set-value.js";
 import { settingMargin } from "../setting/setting-margin.js";
 import { withUnplanned } from "../setting/setting-range.js";
 import { isFit, type Standing, standingOf } from "../setting/standing.js";
+import { opened } from "../words/amount.js";
 import type { Solution, Solved, SolveOptions, Target } from "./solution.js";
+import { pastAlready, signNotes } from "./solve-notes.js";
 import { solveSentence } from "./solve-sentence.js";
 import { type Roots, solveWithin } from "./solve-within.js";
 
@@ -20,7 +29,7 @@ import { type Roots, solveWithin } from "./solve-within.js";
  * the random change itself.
  *
  * @param options.unknown - its unit is that of the constant, state or input.
- * @throws {ModelError} `no-such-setting` | `no-effect` | `no-range` | `bounds-contradict` | `no-target` |
+ * @throws {ModelError} `no-such-setting` | `no-effect` | `past-already` | `risk-outside` | `no-range` | `bounds-contradict` | `no-target` |
  *   `future-input-missing` | `outside-projection` | `unknown-name`.
  * @example
  * const loan = recurrence("owed[t+1] = owed*(1 + i) - payment", { fixed: { i: 0.01 } });
@@ -30,8 +39,7 @@ import { type Roots, solveWithin } from "./solve-within.js";
  */
 export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
   const { unknown, until, level = 0.95 } = options;
-  const aim = until.is ?? until.atMost ?? until.atLeast;
-  if (aim === undefined || !Number.isFinite(aim)) throw refuseNoTarget(aim);
+  const aim = aimOf(until);
   const setting = rangeable(subject, options);
   const standing = standingOf(subject, withUnplanned(subject, options, unknown, setting.between));
   const found = settingOf(standing, unknown);
@@ -45,7 +53,11 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
     // A risk takes a whole run at every place.
     ...(isRisk(until) && { looks: 12 }),
   });
-  if (roots.flat) throw refuseNoEffect(unknown, measureWords(until, standing));
+  const everywhere = measuredWhereAllMeet(roots, aim, until);
+  const past = pastAlready(standing, until, found);
+  if (roots.flat && past !== undefined) throw refusePastAlready(past);
+  if (everywhere === undefined && hasNoEffect(roots, aim, until))
+    throw refuseNoEffect(unknown, measureWords(until, standing));
   const solutions = roots.roots.map((root) =>
     solutionAt(standing, found, until, root, reader, excess, options),
   );
@@ -57,8 +69,13 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
     between: [from, to] as const,
     level,
   };
-  const answer = { ...question, solutions, nearest: nearestOf(roots, reader) };
-  return Object.freeze({ kind: "solution", ...answer, sentence: solveSentence(answer, standing) });
+  const answer = { ...question, solutions, everywhere, nearest: nearestOf(roots, reader) };
+  const sentence = [
+    solveSentence(answer, standing),
+    ...(past === undefined ? [] : [`${opened(past)}.`]),
+    ...signNotes(standing, found, answer),
+  ].join(" ");
+  return Object.freeze({ kind: "solution", ...answer, sentence });
 }
 
 function rangeable(
@@ -73,6 +90,27 @@ function rangeable(
   if (bounds !== undefined && (to < bounds[0] || from > bounds[1]))
     throw refuseBounds(unknown, from, to, `the rule admits ${bounds[0]} to ${bounds[1]}`);
   return { between };
+}
+
+/** The value asked for; of a risk between 0 and 1. */
+function aimOf(target: Target): number {
+  const aim = target.is ?? target.atMost ?? target.atLeast;
+  if (aim === undefined || !Number.isFinite(aim)) throw refuseNoTarget(aim);
+  if (isRisk(target) && !(aim >= 0 && aim <= 1)) throw refuseRiskTarget(aim);
+  return aim;
+}
+
+/** Smallest and largest measure where no place misses the target. */
+function measuredWhereAllMeet({ least, greatest }: Roots, aim: number, target: Target): Solved["everywhere"] {
+  if (target.is !== undefined || !(greatest <= 0)) return undefined;
+  return target.atLeast === undefined ? [aim + least, aim + greatest] : [aim - greatest, aim - least];
+}
+
+/** The same everywhere, and not because it can go no further: a risk of 0% or 100%, a time never reached. */
+function hasNoEffect({ flat, least }: Roots, aim: number, target: Target): boolean {
+  if (!flat || !Number.isFinite(least)) return false;
+  const measure = aim + sidedExcess(target, least);
+  return !(isRisk(target) && (measure === 0 || measure === 1));
 }
 
 type Reader = (value: number) => Estimated;

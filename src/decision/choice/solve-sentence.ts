@@ -1,23 +1,52 @@
-import { measuredClause, measuredWords } from "../measure/measure.js";
+import { isRisk, measuredClause, measuredWords, reachWords } from "../measure/measure.js";
 import type { Standing } from "../setting/standing.js";
 import { amount, levelWords, plain, rounded } from "../words/amount.js";
 import { conditionWords } from "../words/record-words.js";
-import type { Solution, Solved } from "./solution.js";
+import type { Solution, Solved, Target } from "./solution.js";
+
+type Question = Omit<Solved, "kind" | "sentence">;
 
 /** The answer in words: what to set, the margin, what it brings about, and on what it stands. */
-export function solveSentence(answer: Omit<Solved, "kind" | "sentence">, standing: Standing): string {
+export function solveSentence(answer: Question, standing: Standing): string {
   const { unknown, solutions } = answer;
+  if (answer.everywhere !== undefined) return everyWords(answer, answer.everywhere, standing);
   if (solutions.length === 0) return unsolved(answer, standing);
   const settings = solutions.map((solution) => settingWords(solution, answer)).join(", or ");
   const many = solutions.length > 1 ? `${solutions.length} settings meet the target: ` : "";
   const [first] = solutions;
-  const brought = measuredClause(answer.target, first!.achieved, first!.achievedError, standing);
+  const brought = broughtWords(answer.target, first!, standing);
   const chance =
     first!.achievedError > 0 ? ` (Monte-Carlo error ${plain(100 * first!.achievedError, 1)}%)` : "";
   return `${many}With ${unknown} ${settings}, ${brought}${chance}, provided ${conditionWords(standing.rule, standing.fit)}.`;
 }
 
-function settingWords(solution: Solution, { unit, level }: Omit<Solved, "kind" | "sentence">): string {
+/** A time that is to come no earlier than asked is said by the limit, as it may lie beyond the projection. */
+function broughtWords(target: Target, { achieved, achievedError }: Solution, standing: Standing): string {
+  if ("time" in target && target.atLeast !== undefined)
+    return `${reachWords(target.time, target, standing)} not before ${standing.periodUnit} ${plain(target.atLeast, 5)}`;
+  return measuredClause(target, achieved, achievedError, standing);
+}
+
+/** Where every setting looked at meets the target. */
+function everyWords(
+  { unknown, unit, between, measure, target }: Question,
+  [least, greatest]: readonly [number, number],
+  standing: Standing,
+): string {
+  const risk = isRisk(target);
+  const said = (value: number): string => {
+    if (risk) return `${plain(100 * value, 3)}%`;
+    return Number.isFinite(value) ? measuredWords(target, value, 0, standing) : "never within the projection";
+  };
+  const span = least === greatest ? `${said(least)} throughout` : `from ${said(least)} to ${said(greatest)}`;
+  return `Every ${unknown} looked at from ${rangeWords(between, unit)} meets the target: ${measure} is ${span}${risk ? " (simulated)" : ""}, provided ${conditionWords(standing.rule, standing.fit)}.`;
+}
+
+function rangeWords(between: Question["between"], unit: string): string {
+  return `${plain(between[0], 4)} to ${amount(plain(between[1], 4), unit)}`;
+}
+
+function settingWords(solution: Solution, { unit, level }: Question): string {
   const { margin, value } = solution;
   const side = {
     "this value only": "at",
@@ -26,15 +55,34 @@ function settingWords(solution: Solution, { unit, level }: Omit<Solved, "kind" |
   };
   const spread =
     margin?.lower === undefined || margin.upper === undefined ? undefined : (margin.upper - margin.lower) / 4;
-  const digits = solution.value === solution.exact ? rounded(value, spread) : plain(value, 12);
+  const digits = solution.value === solution.exact ? limitWords(solution, spread) : plain(value, 12);
   const said = `${side[solution.meets]} ${amount(digits, unit)}`;
   if (spread === undefined || margin === undefined) return said;
   return `${said} (${levelWords(level)} interval ${rounded(margin.lower!, spread)} to ${rounded(margin.upper!, spread)})`;
 }
 
-function unsolved(answer: Omit<Solved, "kind" | "sentence">, standing: Standing): string {
+/** A limit rounded to the side that meets the target. */
+function limitWords({ value, meets }: Solution, spread: number | undefined): string {
+  const said = rounded(value, spread);
+  const over = Number(said) - value;
+  const outward = meets === "this value and above" ? 1 : -1;
+  // A difference in the last digits that a search leaves is none.
+  if (meets === "this value only" || over * outward >= -1e-9 * Math.abs(value)) return said;
+  const size = spread === undefined || !(spread > 0) ? Math.abs(value) * 1e-2 : spread;
+  const unit = 10 ** (Math.floor(Math.log10(size)) - 1);
+  return rounded(Number(said) + outward * unit, spread);
+}
+
+/** Whether even the nearest miss is a risk that can lie no further off. */
+function endOfRisk({ target, nearest }: Question): boolean {
+  return isRisk(target) && nearest.achieved === (target.atMost === undefined ? 0 : 1);
+}
+
+function unsolved(answer: Question, standing: Standing): string {
   const { unknown, unit, between, measure, nearest, target } = answer;
-  const range = `${plain(between[0], 4)} to ${amount(plain(between[1], 4), unit)}`;
+  const range = rangeWords(between, unit);
+  if (endOfRisk(answer))
+    return `No ${unknown} looked at from ${range} brings ${measure} to the target: it is ${100 * nearest.achieved}% throughout (simulated).`;
   const miss = Number.isFinite(nearest.achieved)
     ? `the nearest is ${measuredWords(target, nearest.achieved, 0, standing)} with ${unknown} at ${amount(plain(nearest.value, 4), unit)}`
     : "it is never reached within the projection";

@@ -5,6 +5,9 @@ export interface Roots {
   readonly roots: readonly number[];
   /** The place looked at with the smallest value, in size. */
   readonly nearest: { readonly at: number; readonly excess: number };
+  /** Smallest and largest value found; NaN where some place has none. */
+  readonly least: number;
+  readonly greatest: number;
   /** Whether the function was the same everywhere. */
   readonly flat: boolean;
 }
@@ -46,6 +49,8 @@ export function solveWithin(
   return {
     roots,
     nearest: { at: places[best]!, excess: values[best]! },
+    least: Math.min(...values),
+    greatest: Math.max(...values),
     flat: numbers.length > 1 && numbers.every((value) => value === numbers[0]),
   };
 }

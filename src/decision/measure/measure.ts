@@ -63,7 +63,8 @@ export function measureWords(measure: Measure, units: MeasureUnits): string {
   return `the ${kind} of ${name}${windowWords(measure as Window, units)}`;
 }
 
-function reachWords(
+/** "owed falls to 0 EUR". */
+export function reachWords(
   name: string,
   { value, direction }: { readonly value: number; readonly direction: Direction },
   { unitOf }: MeasureUnits,

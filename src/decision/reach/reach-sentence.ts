@@ -9,7 +9,19 @@ type Ahead = Forecast | Simulation;
 
 /** The answer for one group: number, unit, interval, what the margin carries, and on what it stands. */
 export function groupSentence(ahead: Ahead, answer: Answer, question: ReachQuestion): string {
-  return `${opened(groupBody(ahead, answer, question))}, provided ${condition(ahead)}.${marginWords(question, answer)}`;
+  return `${opened(groupBody(ahead, answer, question))}, provided ${condition(ahead)}.${marginWords(question, answer)}${signWords(ahead, [answer], question)}`;
+}
+
+/** What the forecast says of paths below zero, where an answer is read from beyond that place. */
+function signWords(ahead: Ahead, answers: readonly Answer[], { state }: ReachQuestion): string {
+  const said = answers.flatMap(({ group, scenario, time, beginsPast }) => {
+    const projected = ahead.groups.find((each) => each.group === group && each.scenario === scenario)!;
+    const { central } = projected.states.find((each) => each.state === state)!;
+    const below = central.findIndex((value, t) => projected.index[t]! > projected.recordEnd && value < 0);
+    const before = beginsPast || below < 0 || (time !== undefined && time <= projected.time[below]!);
+    return before ? [] : projected.warnings.filter((warning) => warning.code === "leaves-recorded-sign");
+  });
+  return said.map(({ message }) => ` ${message}`).join("");
 }
 
 function groupBody(ahead: Ahead, answer: Answer, question: ReachQuestion): string {
@@ -32,7 +44,7 @@ export function reachSentence(
     ? byScenario(ahead, groups, question)
     : byGroup(ahead, groups, question) + newUnit(ahead, across, question);
   const margin = groups.find((group) => group.time !== undefined);
-  return `${opened(body)}, provided ${condition(ahead)}.${margin === undefined ? "" : marginWords(question, margin)}`;
+  return `${opened(body)}, provided ${condition(ahead)}.${margin === undefined ? "" : marginWords(question, margin)}${signWords(ahead, groups, question)}`;
 }
 
 function byGroup(ahead: Ahead, groups: readonly GroupReach[], question: ReachQuestion): string {

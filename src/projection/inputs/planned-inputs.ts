@@ -25,8 +25,10 @@ export function plannedInputs(rule: Rule, plans: InputPlans, known: KnownInputs)
   const reach = inputReach(rule);
   const needed = (slot: number): number => Math.max(0, known.last + reach[slot]![1] - known.rows);
   const missing = rule.inputs.filter((name, slot) => needed(slot) > 0 && plans[name] === undefined);
-  if (missing.length > 0)
-    throw refuseFutureInput(missing, Math.max(...rule.inputs.map((_, slot) => needed(slot))));
+  if (missing.length > 0) {
+    const count = Math.max(...rule.inputs.map((_, slot) => needed(slot)));
+    throw refuseFutureInput(missing, count, known.rows === 0 ? 0 : known.last - known.rows + 1 - count);
+  }
   return rule.inputs.map((name, slot) => {
     const count = needed(slot);
     const ahead = count === 0 ? [] : plannedValues(name, plans[name] as InputPlan, known.firstNumber, count);
