@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { reaches, type SolveOptions, solveFor } from "../../src/decision/index.js";
+import { reaches, type SolveOptions, solveFor, tradeoff } from "../../src/decision/index.js";
 import { fit } from "../../src/estimate/index.js";
 import { forecast } from "../../src/projection/index.js";
 import { observations, tableOf } from "../../src/record/index.js";
@@ -88,4 +88,26 @@ test("an answer read from below zero, where no record was, says so", () => {
   const warning = /By year 15 the rule gives index = -\d+(\.\d)? under "high"/;
   expect(reaches(ahead, { value: 500, direction: "rising" }).sentence).toMatch(warning);
   expect(reaches(ahead, { value: 300, direction: "falling" }).sentence).not.toMatch(warning);
+  const compared = tradeoff(fitted, {
+    setting: "landed",
+    values: [17, 100],
+    periods: 6,
+    answers: { index: { level: "index", at: 6 } },
+    paths: 200,
+  });
+  expect(compared.sentence).toMatch(/By year 15 the rule gives index = -\d+(\.\d)? under "landed 100": no/);
+  const solved = solveFor(fitted, {
+    unknown: "landed",
+    between: [10, 200],
+    periods: 6,
+    until: { level: "index", at: 6, is: -50 },
+  });
+  expect(solved.sentence).toContain("By year 15 the rule gives index = -50 under");
+  const kept = solveFor(fitted, {
+    unknown: "landed",
+    between: [10, 200],
+    periods: 6,
+    until: { level: "index", at: 6, is: 0 },
+  });
+  expect(kept.sentence).not.toContain("no record");
 });

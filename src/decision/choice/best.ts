@@ -12,6 +12,7 @@ import { type Standing, type StandingOptions, standingOf } from "../setting/stan
 import { amount, levelWords, opened, plain, rounded } from "../words/amount.js";
 import { conditionWords } from "../words/record-words.js";
 import { findPeak } from "./find-peak.js";
+import { signNotes } from "./solve-notes.js";
 import { solveWithin } from "./solve-within.js";
 
 /** Options of `best`. */
@@ -91,7 +92,9 @@ export function best(subject: Fit | Rule, options: BestOptions): Best {
     level,
     curve: peak.looked.map((at) => ({ setting: at.at, measure: sign * at.height })),
   };
-  return Object.freeze({ kind: "best", ...answer, sentence: bestSentence(answer, measure, sign, standing) });
+  const notes = signNotes(standing, setting, answer.value, measure, answer.achieved);
+  const sentence = [bestSentence(answer, measure, sign, standing), ...notes].join(" ");
+  return Object.freeze({ kind: "best", ...answer, sentence });
 }
 
 /** The objective, turned so that the best is the highest; a place without a value is the lowest. */

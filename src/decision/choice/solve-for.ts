@@ -73,7 +73,9 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
   const sentence = [
     solveSentence(answer, standing),
     ...(past === undefined ? [] : [`${opened(past)}.`]),
-    ...signNotes(standing, found, answer),
+    ...solutions
+      .slice(0, 1)
+      .flatMap(({ value, achieved }) => signNotes(standing, found, value, until, achieved)),
   ].join(" ");
   return Object.freeze({ kind: "solution", ...answer, sentence });
 }

@@ -1,8 +1,9 @@
 import { centralPath, recordedSignWarnings } from "../../projection/index.js";
+import type { Measure } from "../measure/measure.js";
 import type { Setting } from "../setting/set-value.js";
 import type { Standing } from "../setting/standing.js";
 import { amount, plain } from "../words/amount.js";
-import type { Solved, Target } from "./solution.js";
+import type { Target } from "./solution.js";
 
 /** What is past its value at the start already, as a clause; undefined where nothing is, or the start itself is sought. */
 export function pastAlready(standing: Standing, target: Target, setting: Setting): string | undefined {
@@ -18,23 +19,31 @@ export function pastAlready(standing: Standing, target: Target, setting: Setting
   return `${state} begins at ${amount(plain(now, 4), unit)}, already at or ${falling ? "below" : "above"} ${amount(plain(target.value, 12), unit)}`;
 }
 
-type Answer = Pick<Solved, "solutions" | "target">;
-
-/** For a fit: what the rule does below zero at the first setting found, as far as the answer is read from there. */
-export function signNotes(standing: Standing, setting: Setting, { solutions, target }: Answer): string[] {
-  const [solution] = solutions;
+/**
+ * For a fit: what the rule does below zero with a setting at a value, as far as a measure is read from there.
+ *
+ * @param achieved - the measure there.
+ */
+export function signNotes(
+  standing: Standing,
+  setting: Setting,
+  value: number,
+  measure: Measure,
+  achieved: number,
+): string[] {
   const { fitGround, fit } = standing;
-  if (solution === undefined || fitGround === undefined || fit === undefined) return [];
-  const ground = { ...fitGround, ...setting.at(solution.value) };
-  const last = lastRead(standing, target, solution.achieved);
+  if (fitGround === undefined || fit === undefined) return [];
+  const ground = { ...fitGround, ...setting.at(value) };
+  const last = lastRead(standing, measure, achieved);
   const { unit } = fit.observations.period;
   const period = (row: number): string => `${unit} ${plain(standing.timeAt(row), 6)}`;
   const central = centralPath(ground);
-  return recordedSignWarnings({ central, ground, scenario: "", period, last }).map(({ message }) => message);
+  const scenario = `${setting.name} ${plain(value, 4)}`;
+  return recordedSignWarnings({ central, ground, scenario, period, last }).map(({ message }) => message);
 }
 
 /** The last row that a measure reads. */
-function lastRead(standing: Standing, target: Target, achieved: number): number {
+function lastRead(standing: Standing, target: Measure, achieved: number): number {
   const { present, ground, timeAt } = standing;
   if ("level" in target) return present + target.at;
   if ("time" in target && Number.isFinite(achieved))

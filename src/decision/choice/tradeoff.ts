@@ -9,6 +9,7 @@ import { type Setting, settingOf } from "../setting/set-value.js";
 import { withUnplanned } from "../setting/setting-range.js";
 import { type Standing, type StandingOptions, standingOf } from "../setting/standing.js";
 import { amount, plain } from "../words/amount.js";
+import { signNotes } from "./solve-notes.js";
 
 /** Options of `tradeoff`. */
 export interface TradeoffOptions extends StandingOptions {
@@ -70,6 +71,11 @@ export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeof
     Object.entries(answers).map(([shown, measure]) => [shown, measureWords(measure, standing)]),
   );
   const unit = standing.unitOf(name);
+  const notes = [rows[0]!, rows[rows.length - 1]!].flatMap((row) =>
+    Object.entries(answers).flatMap(([shown, measure]) =>
+      signNotes(standing, setting, row.setting, measure, row.answers[shown]!),
+    ),
+  );
   return Object.freeze({
     kind: "tradeoff",
     setting: name,
@@ -77,7 +83,7 @@ export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeof
     measures: Object.freeze(measures),
     answers,
     rows: Object.freeze(rows),
-    sentence: sentenceOf(name, unit, rows, answers, standing),
+    sentence: [sentenceOf(name, unit, rows, answers, standing), ...new Set(notes)].join(" "),
   });
 }
 
