@@ -5,6 +5,7 @@ import { significant } from "./number-text.js";
 import { axisTitle } from "./plot-text.js";
 import { type DrawnLine, recordedStyle } from "./recorded-series.js";
 import type { SmallMultiplesOptions, SmallSeries } from "./small-multiples.js";
+import { yearLike } from "./year-like.js";
 
 /** Least and greatest value on an axis. */
 export type Ends = readonly [number, number];
@@ -76,11 +77,12 @@ function together(lines: readonly { x: number[]; y: number[] }[]): { x: number[]
 }
 
 function seriesTable(title: string, x: Axis, y: Axis, series: readonly SmallSeries[]): Table {
+  const grouped = !series.every(({ recorded }) => yearLike(Array.from<unknown>(recorded.x)));
   return table({
     title: `Numbers behind: ${title}`,
     columns: [
       { key: "name", label: "Series", kind: "text" },
-      { key: "x", label: axisTitle(x), kind: "number", digits: 6 },
+      { key: "x", label: axisTitle(x), kind: "number", digits: 6, grouped },
       { key: "recorded", label: axisTitle(y), kind: "number", digits: 5 },
     ],
     rows: series.flatMap(({ name, recorded }) =>

@@ -3,6 +3,7 @@ import type { Figure, Panel } from "./figure.js";
 import type { Layer } from "./layer.js";
 import { axisTitle } from "./plot-text.js";
 import { thinned } from "./thinned.js";
+import { yearLike } from "./year-like.js";
 
 type Drawn = Extract<Layer, { mark: "points" | "line" | "band" | "bars" }>;
 type Row = Record<string, unknown>;
@@ -19,11 +20,13 @@ function panelNumbers(panel: Panel, title: string): Table | undefined {
   if (drawn.length === 0) return undefined;
   const lying = drawn.some((layer) => layer.mark === "bars" && layer.lying);
   const across = lying ? panel.y : panel.x;
-  const place: Column = { key: "place", label: axisTitle(across), kind: "number", digits: 6 };
+  const rows = mergedRows(drawn);
+  const grouped = !yearLike(rows.map((row) => row["place"]));
+  const place: Column = { key: "place", label: axisTitle(across), kind: "number", digits: 6, grouped };
   return table({
     title: panel.title === "" ? `Numbers behind: ${title}` : panel.title,
     columns: [place, ...drawn.flatMap(layerColumns)],
-    rows: mergedRows(drawn),
+    rows,
     notes: drawn.some((layer) => listedPlaces(layer).length < layer.x.length) ? [partly] : [],
     limit: 60,
   });

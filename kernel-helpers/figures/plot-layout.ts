@@ -4,6 +4,7 @@ import { type PanelPlace, panelPlaces } from "./panel-places.js";
 import { panelMarks } from "./plot-marks.js";
 import { axisTitle, plotText } from "./plot-text.js";
 import { axisName, type PlotTrace } from "./plot-traces.js";
+import { acrossYears } from "./year-like.js";
 
 /** Layout of the plotting library, as data; `height` in pixels. */
 export type PlotLayout = Readonly<Record<string, unknown>> & { readonly height: number };
@@ -67,8 +68,10 @@ function panelAxes(panel: Panel, at: number, place: PanelPlace, still: boolean):
   const x = axisName("x", at);
   const y = axisName("y", at);
   const long = (name: string): string => name.replace(/^[xy]/, (letter) => `${letter}axis`);
+  const across = axisLook(panel.x, place.columns, still);
+  const years = acrossYears(panel) ? { separatethousands: false } : {};
   return [
-    [long(x), { ...axisLook(panel.x, place.columns, still), domain: place.x, anchor: y }],
+    [long(x), { ...across, ...years, domain: place.x, anchor: y }],
     [long(y), { ...axisLook(panel.y, place.rows, still), domain: place.y, anchor: x }],
   ];
 }
