@@ -3,7 +3,7 @@ import type { CentralPath } from "./central-path.js";
 import type { FitGround } from "./fit-ground.js";
 
 /** Where a path ahead, and in what words, is looked at. */
-export interface SignQuestion {
+interface SignQuestion {
   readonly central: CentralPath;
   readonly ground: FitGround;
   /** "" for the only one. */

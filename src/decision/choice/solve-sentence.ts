@@ -38,7 +38,8 @@ function everyWords(
     if (risk) return `${plain(100 * value, 3)}%`;
     return Number.isFinite(value) ? measuredWords(target, value, 0, standing) : "never within the projection";
   };
-  const span = least === greatest ? `${said(least)} throughout` : `from ${said(least)} to ${said(greatest)}`;
+  const same = Number.isFinite(least) ? `${said(least)} throughout` : said(least);
+  const span = least === greatest ? same : `from ${said(least)} to ${said(greatest)}`;
   return `Every ${unknown} looked at from ${rangeWords(between, unit)} meets the target: ${measure} is ${span}${risk ? " (simulated)" : ""}, provided ${conditionWords(standing.rule, standing.fit)}.`;
 }
 
