@@ -27,6 +27,10 @@ export function refuseEmptyAnswer(): ModelError {
   return new ModelError("empty-answer", "An answer is a sentence; an empty text was given.");
 }
 
+export function refuseNoTerm(): ModelError {
+  return new ModelError("no-term", 'Which word? Give one of the trade, as in explain("fill rate").');
+}
+
 export function refuseUnknownTerm(
   name: string,
   nearest: readonly string[],

@@ -6,7 +6,9 @@ import {
   recurrence as readRule,
 } from "../../src/rule/index.js";
 import { showing } from "../tables/index.js";
+import { catalogueTable } from "./catalogue-table.js";
 import { showRule } from "./show-rule.js";
+import { shownTogether } from "./shown-together.js";
 
 export type { RecurrenceOptions, Rule, RuleCatalogue } from "../../src/rule/index.js";
 
@@ -31,11 +33,11 @@ const showingItself =
 
 /**
  * The catalogue: rules that have a name. Each is called for its rule, which shows its range, rest levels, slopes,
- * closed form, source and remarks.
+ * closed form, source and remarks; the catalogue itself shows its rules as a table.
  *
  * @example rules.bevertonHolt().constants; // ["R", "K"]
  */
-export const rules: RuleCatalogue = Object.freeze(
+export const rules: RuleCatalogue = showing(
   // Every maker keeps its own options: only what it gives is wrapped.
   Object.fromEntries(
     Object.entries(namedRules).map(([name, make]) => [
@@ -43,4 +45,5 @@ export const rules: RuleCatalogue = Object.freeze(
       showingItself(make as (options?: never) => Rule),
     ]),
   ) as unknown as RuleCatalogue,
+  () => shownTogether([catalogueTable()]),
 );

@@ -51,6 +51,13 @@ export function unreadableOption(option: string, wanted: string, given: unknown)
   });
 }
 
+export function missingPeriod(): ModelError {
+  return new ModelError(
+    "period-missing",
+    "Which period? Give { period: 2 } for cycles of two values, { period: 3 } for cycles of three.",
+  );
+}
+
 export function oneStateOnly(what: string, states: readonly string[]): ModelError {
   return new ModelError(
     "one-state-only",

@@ -5,7 +5,9 @@ import { fitGroups } from "./fits/fit-group.js";
 import { checkOptions } from "./options/check-options.js";
 import { conventionsOf } from "./options/conventions.js";
 import type { FitOptions } from "./options/fit-options.js";
+import { inputWarnings } from "./options/input-warnings.js";
 import { matchStates } from "./options/match-states.js";
+import { refuseMissingArgument } from "./refusals.js";
 import type { Estimate } from "./result/estimate-of.js";
 import type { GroupFit } from "./result/group-fit.js";
 
@@ -35,7 +37,7 @@ export interface Fit {
  * @param observations - per group at least as many values (pairs) as unknowns + 3; gaps stay gaps.
  * @returns estimates with standard errors (sigma^2 = RSS/(n - p)), profile and Wald intervals, residuals, stop
  *   reason and warnings, a group at a time.
- * @throws {ModelError} `errors-not-stated` | `unknown-spread` | `bad-spread` | `factor-without-trajectory` |
+ * @throws {ModelError} `argument-missing` | `errors-not-stated` | `unknown-spread` | `bad-spread` | `factor-without-trajectory` |
  *   `robust-not-by-squares` | `rule-jumps` |
  *   `states-not-recorded` | `too-few-observations` | `no-change` | `no-logarithm` | `not-a-count` | `all-censored` |
  *   `no-finite-start` | `unknown-name` | `start-outside-bounds` | `input-not-recorded` | `input-missing-in-period`.
@@ -46,6 +48,8 @@ export interface Fit {
  * fit(crowding, counts, { errors: "observation" }).groups[0].stop.kind; // "converged"
  */
 export function fit(rule: Rule, observations: Observations, options: FitOptions): Fit {
+  if (rule?.kind !== "rule") throw refuseMissingArgument("rule");
+  if (observations?.kind !== "observations") throw refuseMissingArgument("record");
   checkOptions(rule, options);
   const matched = matchStates(rule, observations);
   const { groups, population } = fitGroups(rule, matched.groups, options);
@@ -56,7 +60,7 @@ export function fit(rule: Rule, observations: Observations, options: FitOptions)
     options: Object.freeze({ ...options }),
     groups: Object.freeze(groups),
     ...(population && { population: Object.freeze(population) }),
-    warnings: Object.freeze([...rule.findings]),
+    warnings: Object.freeze([...rule.findings, ...inputWarnings(rule, matched, options)]),
     conventions: Object.freeze(conventionsOf(options, groups)),
   });
 }

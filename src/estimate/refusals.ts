@@ -3,6 +3,15 @@ import type { ObservedGroup } from "../record/index.js";
 
 const named = (group: ObservedGroup): string => (group.name === "" ? "" : ` of "${group.name}"`);
 
+export function refuseMissingArgument(what: "rule" | "record"): ModelError {
+  const order = "A rule comes first, then the record";
+  const made =
+    what === "rule" ? "Make a rule with recurrence(...) or rules" : "Make a record with observations(...)";
+  return new ModelError("argument-missing", `No ${what} was given where one is needed. ${order}. ${made}.`, {
+    argument: what,
+  });
+}
+
 export function refuseMissingErrors(): ModelError {
   return new ModelError(
     "errors-not-stated",

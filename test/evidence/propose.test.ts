@@ -66,6 +66,28 @@ describe("propose", () => {
     expect(proposal.notTried).toContainEqual({ name: "ricker", reason: "speaks of positive levels only" });
   });
 
+  test("reads a single recorded input as the catch, and says which inputs the answer leaves out", () => {
+    const stream = randomStream(4);
+    const rows = { t: [] as number[], index: [] as number[], landed: [] as number[], heat: [] as number[] };
+    let level = 840;
+    for (let t = 0; t < 25; t++) {
+      const taken = Math.round(60 + 140 * Math.exp(-(((t - 10) / 3) ** 2)));
+      rows.t.push(t);
+      rows.index.push(level * Math.exp(0.04 * stream.normal()));
+      rows.landed.push(taken);
+      rows.heat.push(10 + stream.normal());
+      level += 0.42 * level * (1 - level / 1000) - taken;
+    }
+    const stock = (...inputs: string[]): ReturnType<typeof observations> =>
+      observations(tableOf(rows), { period: "t", step: { every: 1, of: "year" }, value: "index", inputs });
+    const proposal = propose(stock("landed"), { errors: "observation" });
+    expect(proposal.verdict.rules).toContain("schaefer");
+    expect(proposal.notes.join(" ")).toContain('The only recorded input, "landed", was taken as the catch C');
+    expect(proposal.sentence).not.toContain("Left out");
+    const both = propose(stock("landed", "heat"), { errors: "observation" });
+    expect(both.sentence).toContain('Left out of this answer: the recorded inputs "landed", "heat".');
+  });
+
   test("asks which of several states is meant", () => {
     const table = tableOf({
       t: [0, 1, 2, 3, 4, 5, 6, 7],

@@ -1,5 +1,5 @@
 import type { Interval, Rule } from "../../rule/index.js";
-import { oneStateOnly, unreadableOption } from "../refusals.js";
+import { missingPeriod, oneStateOnly, unreadableOption } from "../refusals.js";
 import { type Multiplier, multipliersOf } from "../rest/multiplier.js";
 import { type Stability, stabilityOf } from "../rest/stability.js";
 import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.js";
@@ -66,11 +66,12 @@ function described(held: HeldStep, points: readonly number[]): Cycle {
  * Finds all cycles of a period by solving f(f(...x)) = x over a range, not by waiting for values to repeat: unstable
  * ones are found too, and none in the range is lost.
  *
- * @throws {ModelError} `one-state-only` | `unreadable-option` | `missing-value` | `rule-changes-with-time`.
+ * @throws {ModelError} `period-missing` | `one-state-only` | `unreadable-option` | `missing-value` | `rule-changes-with-time`.
  * @example cycles(recurrence("x[t+1] = 3.2*x*(1 - x)"), { period: 2, within: [0, 1] }).cycles[0].multiplier.re.toFixed(6); // "0.160000"
  */
 export function cycles(rule: Rule, options: CyclesOptions): Cycles {
-  const { period } = options;
+  const period = options?.period;
+  if (period === undefined) throw missingPeriod();
   if (rule.states.length !== 1 || rule.memory.length > 0) throw oneStateOnly("A cycle", rule.states);
   if (!Number.isSafeInteger(period) || period < 1 || period > 64) {
     throw unreadableOption("period", "a whole number from 1 to 64", period);

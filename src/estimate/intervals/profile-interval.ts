@@ -10,6 +10,8 @@ export interface Profile {
   readonly firm: boolean;
   /** By increasing value of the unknown: the increase, the other unknowns at their best. */
   readonly trace: readonly { readonly value: number; readonly increase: number }[];
+  /** Points met on the way that lie within the cut. */
+  readonly inside: readonly Float64Array[];
   /** A better optimum met on the way, from which the fit must be done again. */
   readonly better: Float64Array | undefined;
 }
@@ -43,6 +45,7 @@ export function profileInterval(problem: ProfileProblem, i: number, spacing: num
     note,
     firm: down.firm && up.firm,
     trace,
+    inside: walk.inside,
     better: walk.better(),
   };
 }

@@ -32,6 +32,8 @@ export interface ProfileWalk {
   readonly at: (value: number) => Excess;
   readonly restart: () => void;
   readonly trace: { value: number; increase: number }[];
+  /** Points within the cut. */
+  readonly inside: readonly Float64Array[];
   readonly better: () => Float64Array | undefined;
 }
 
@@ -42,9 +44,11 @@ export function profileWalk(problem: ProfileProblem, i: number): ProfileWalk {
   const upper = problem.upper.slice();
   let from: Float64Array = estimates.slice();
   const trace: { value: number; increase: number }[] = [];
+  const inside: Float64Array[] = [];
   let better: Float64Array | undefined;
   return {
     trace,
+    inside,
     better: () => better,
     restart: () => {
       from = estimates.slice();
@@ -63,6 +67,7 @@ export function profileWalk(problem: ProfileProblem, i: number): ProfileWalk {
       if (rise < -1e-6 * variance) better = from.slice();
       const increase = Math.max(0, rise) / variance;
       trace.push({ value, increase });
+      if (increase < cut) inside.push(from);
       const root = Math.sqrt(increase);
       return { value, excess: root - Math.sqrt(cut), slope: slope / (2 * variance * root) };
     },

@@ -1,5 +1,6 @@
 import type { StopReason } from "../../numeric/index.js";
 import { type Profile, profileInterval } from "../intervals/profile-interval.js";
+import { withoutFalseLimits } from "../intervals/without-false-limits.js";
 import type { Unknowns } from "../unknowns/unknowns.js";
 import type { Cut } from "./cut.js";
 import type { Lowest, Objective } from "./objective.js";
@@ -26,6 +27,8 @@ export interface Optimum {
 const tries = 5;
 /** Rivals closer than this, relative, are the same optimum. */
 const same = 1e-4;
+/** Times beyond a start at which an unknown has run off. */
+const runaway = 1e6;
 
 /** The lowest optimum from several starts, with its profiles; done again where a profile finds a lower one. */
 export function optimum(
@@ -53,17 +56,44 @@ export function optimum(
     rivals,
   };
   if (!withProfiles) return { ...base, profiles: undefined, determined: unscaled.determined };
-  const others = distinct(searches).filter((other) => !alike(other, at));
+  const ends = distinct(searches).filter((other) => !alike(other, at));
+  // From where a constant has run off no search comes back: the profile must be tried from before that as well.
+  const others = hasRunOff(at, starts) ? [...ends, ...starts.slice(0, tries)] : ends;
   const problem = { objective, estimates: at, value: best.value, lower, upper, covariance, others, ...cut };
-  const profiles = unknowns.names.map((_, i) => {
+  const profileFrom = (ends: readonly Float64Array[], i: number): Profile => {
     const error = Math.sqrt(covariance[i * objective.size + i]!);
     const usable = unscaled.determined[i] && error > 0 && Number.isFinite(error);
-    return profileInterval(problem, i, usable ? error * Math.sqrt(cut.cut) : 0.1 * Math.abs(at[i]!) || 1);
-  });
+    const spacing = usable ? error * Math.sqrt(cut.cut) : 0.1 * Math.abs(at[i]!) || 1;
+    return profileInterval({ ...problem, others: ends }, i, spacing);
+  };
+  const profiles = unknowns.names.map((_, i) => profileFrom(others, i));
   const better = profiles.find((profile) => profile.better !== undefined)?.better;
   if (better !== undefined && starts[0] !== better)
-    return optimum(objective, unknowns, [better], cutAt, withProfiles);
-  return { ...base, profiles, determined: unscaled.determined.map((known, i) => known && profiles[i]!.firm) };
+    return optimum(objective, unknowns, [better, ...starts], cutAt, withProfiles);
+  const near = searches.filter(({ value }) => value - best.value < cut.cut * cut.variance);
+  const inside = [
+    ...near.map(({ estimates }) => estimates),
+    ...profiles.flatMap((profile) => profile.inside),
+  ];
+  const again = withoutFalseLimits(profiles, at, inside).map((profile, i) =>
+    profile === profiles[i] ? profile : profileFrom([...others, ...outermost(inside, i)], i),
+  );
+  const kept = withoutFalseLimits(again, at, [...inside, ...again.flatMap((profile) => profile.inside)]);
+  const determined = unscaled.determined.map((known, i) => known && kept[i]!.firm);
+  return { ...base, profiles: kept, determined };
+}
+
+/** The points at which unknown i is lowest and highest. */
+function outermost(points: readonly Float64Array[], i: number): readonly Float64Array[] {
+  const sorted = [...points].sort((a, b) => a[i]! - b[i]!);
+  return [sorted[0]!, sorted[sorted.length - 1]!];
+}
+
+/** Whether some unknown lies this many times beyond where it was looked for. */
+function hasRunOff(at: Float64Array, starts: readonly Float64Array[]): boolean {
+  const farther = (value: number, start: number): boolean =>
+    Math.abs(value) > runaway * Math.max(1, Math.abs(start));
+  return at.some((value, i) => starts.some((start) => farther(value, start[i]!)));
 }
 
 /** The ends of searches, each once. */

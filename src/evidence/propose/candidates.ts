@@ -1,4 +1,5 @@
 import { type Rule, rules } from "../../rule/index.js";
+import { catchSymbol } from "./catch-input.js";
 
 /** A catalogue rule that one recorded state may identify. */
 export interface Candidate {
@@ -34,7 +35,7 @@ export function candidatesFor(inputs: readonly string[]): {
     bounds: {},
     ...more,
   });
-  const caught = inputs.includes("C");
+  const caught = inputs.includes(catchSymbol);
   const candidates = [
     candidate("constantChange", rules.constantChange(), { anyLevel: true }),
     candidate("geometric", rules.geometric(), { anyLevel: true }),
@@ -55,8 +56,8 @@ export function candidatesFor(inputs: readonly string[]): {
 
 function harvested(): readonly (readonly [string, Rule])[] {
   return [
-    ["schaefer", rules.schaefer({ inputs: ["C"] })],
-    ["fox", rules.fox({ inputs: ["C"] })],
+    ["schaefer", rules.schaefer({ inputs: [catchSymbol] })],
+    ["fox", rules.fox({ inputs: [catchSymbol] })],
   ];
 }
 

@@ -3,18 +3,43 @@ import { aheadOfNaive, supportedWithin } from "./supported-rules.js";
 
 type Found = Omit<Proposal, "kind" | "sentence" | "notes">;
 
+/** What was done for a proposal, besides its result. */
+export interface Effort {
+  /** Fits tried. */
+  readonly tried: number;
+  /** Values held out. */
+  readonly heldOut: number | undefined;
+  /** The recorded input that was taken as the catch under another name. */
+  readonly takenFrom: string | undefined;
+  /** Recorded inputs that no rule named in the answer reads. */
+  readonly unread: readonly string[];
+}
+
 /** What a proposal comes to, as a client would be told, and the price of having looked at many. */
 export function proposalWords(
   found: Found,
-  tried: number,
-  heldOut: number | undefined,
+  { tried, heldOut, takenFrom, unread }: Effort,
 ): Pick<Proposal, "sentence" | "notes"> {
   const notes = [
     `${tried} fits were tried. Among so many the best owes part of its lead to chance: leads below ${supportedWithin} in AICc are no evidence, and a rule must be ${aheadOfNaive} ahead of "no change" and "mean level".`,
+    ...takenNote(takenFrom),
     ...adviceNote(found),
     ...heldOutNote(found, heldOut),
   ];
-  return { sentence: sentenceOf(found), notes };
+  return { sentence: `${sentenceOf(found)}${unreadWords(unread)}`, notes };
+}
+
+function takenNote(takenFrom: string | undefined): string[] {
+  if (takenFrom === undefined) return [];
+  return [
+    `The only recorded input, "${takenFrom}", was taken as the catch C of the harvest rules; the fits handed on hold it as C.`,
+  ];
+}
+
+function unreadWords(unread: readonly string[]): string {
+  if (unread.length === 0) return "";
+  const names = unread.map((name) => `"${name}"`).join(", ");
+  return ` Left out of this answer: the recorded ${unread.length === 1 ? "input" : "inputs"} ${names}.`;
 }
 
 function adviceNote({ advice, errors }: Found): string[] {

@@ -6,6 +6,7 @@ import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseNothingFits } from "../refusals.js";
 import { adviceOn } from "./advice-on.js";
 import { candidatesFor, type NotTried } from "./candidates.js";
+import { catchInput, catchSymbol } from "./catch-input.js";
 import { holdOut } from "./hold-out.js";
 import { oneState } from "./one-state.js";
 import { proposalWords } from "./proposal-words.js";
@@ -68,12 +69,14 @@ export interface Proposal {
  * are no evidence, and a supported rule must not forecast the last fifth of the record, which it was not fitted to,
  * clearly worse than a naive forecast.
  *
+ * A record with a single input is read with it as the catch, "C", of the harvest rules.
+ *
  * @throws {ModelError} `several-states` | `nothing-fits` | `exact-fit`.
  * @example propose(counts, { spread: "proportional" }).verdict.kind; // "undecided"
  */
 export function propose(observations: Observations, options: ProposeOptions = {}): Proposal {
   const { state, errors, seed = 1, ...others } = options;
-  const record = oneState(observations, state);
+  const { record, takenFrom } = catchInput(oneState(observations, state));
   const positive = record.groups.every((group) =>
     Object.values(group.values)[0]!.every((value) => value > 0),
   );
@@ -91,11 +94,12 @@ export function propose(observations: Observations, options: ProposeOptions = {}
     ...failed,
     ...left,
   ];
-  return judged({ record, settings, tried, seed, errors, notTried });
+  return judged({ record, takenFrom, settings, tried, seed, errors, notTried });
 }
 
 interface Trial {
   readonly record: Observations;
+  readonly takenFrom: string | undefined;
   readonly settings: Omit<FitOptions, "errors">;
   readonly tried: readonly Tried[];
   readonly notTried: readonly NotTried[];
@@ -103,7 +107,7 @@ interface Trial {
   readonly seed: number;
 }
 
-function judged({ record, settings, tried, notTried, errors, seed }: Trial): Proposal {
+function judged({ record, takenFrom, settings, tried, notTried, errors, seed }: Trial): Proposal {
   const advice = errors === undefined ? adviceOn(tried, seed) : undefined;
   const chosen = errors ?? advice?.kind ?? "undecided";
   const kinds = chosen === "undecided" ? (["process", "observation"] as const) : [chosen];
@@ -124,13 +128,18 @@ function judged({ record, settings, tried, notTried, errors, seed }: Trial): Pro
     verdict: { kind, rules: names } as const,
     fits: rows.flatMap(({ fit }) => (fit ? [fit] : [])),
   };
-  const words = proposalWords(result, tried.length, held?.values);
+  const told = names.length > 0 ? tried.filter(({ name }) => names.includes(name)) : tried;
+  const unread = record.inputs
+    .filter((input) => !told.some(({ fit }) => fit.rule.inputs.includes(input)))
+    .map((input) => (input === catchSymbol ? (takenFrom ?? input) : input));
+  const words = proposalWords(result, { tried: tried.length, heldOut: held?.values, takenFrom, unread });
   return Object.freeze({ kind: "proposal", ...result, ...words });
 }
 
 function rowOf(standing: Standing, heldOut: number | undefined, beatenBy: string | undefined): ProposedRule {
   const { tried, difference, reason } = standing;
-  const beaten = beatenBy === undefined ? reason : `forecast the last fifth clearly worse than "${beatenBy}"`;
+  const beaten =
+    beatenBy === undefined ? reason : `clearly worse than "${beatenBy}" on the last fifth, held out`;
   return {
     name: tried.name,
     rule: tried.fit.rule.text,

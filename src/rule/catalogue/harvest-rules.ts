@@ -4,6 +4,7 @@ import type { CatalogueEntry } from "./named-rule.js";
 import { capacity, inLevels, level, positive, pure, rate } from "./quantities.js";
 
 const bounds = { r: positive, K: positive, C: positive, B: positive } as const;
+const caught = ["C"] as const;
 const shared = { B: level, r: rate, K: capacity, C: inLevels("catch a period") } as const;
 
 const pellaTomlinson: CatalogueEntry = {
@@ -12,6 +13,7 @@ const pellaTomlinson: CatalogueEntry = {
   text: "ΔB = r/(m - 1)*B*(1 - (B/K)^(m - 1)) - C",
   source: "Pella and Tomlinson (1969), A generalized stock production model, Bull. IATTC 13, 419-496",
   quantities: { ...shared, m: pure("shape: 2 is Schaefer's rule, near 1 Fox's") },
+  mayBeInput: caught,
   holds: ["r > 0", "K > 0", "m > 0 and m != 1", "C >= 0", "B0 >= 0"],
   bounds: { ...bounds, m: positive },
   guesses: { r: 0.4, m: 2 },
@@ -26,6 +28,7 @@ const schaefer: CatalogueEntry = {
   text: "ΔB = r*B*(1 - B/K) - C",
   source: "Schaefer (1954), Some aspects of the dynamics of populations, Bull. IATTC 1, 27-56",
   quantities: shared,
+  mayBeInput: caught,
   holds: ["r > 0", "K > 0", "C >= 0", "B0 >= 0"],
   bounds,
   guesses: { r: 0.4 },
@@ -52,6 +55,7 @@ const fox: CatalogueEntry = {
   text: "ΔB = r*B*log(K/B) - C",
   source: "Fox (1970), An exponential surplus-yield model, Trans. Am. Fish. Soc. 99, 80-88",
   quantities: shared,
+  mayBeInput: caught,
   holds: ["r > 0", "K > 0", "C >= 0", "B0 > 0"],
   bounds,
   guesses: { r: 0.4 },

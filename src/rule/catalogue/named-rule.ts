@@ -32,6 +32,8 @@ export interface NamedRule {
   readonly title: string;
   readonly source: string;
   readonly quantities: Readonly<Record<string, NamedQuantity>>;
+  /** Constants that a record often holds as a column of its own, as a catch: they become inputs when said so. */
+  readonly mayBeInput?: readonly string[];
   /** Conditions under which the rule means what it says; outside them results are refused. */
   readonly holds: readonly string[];
   readonly equilibria: readonly NamedEquilibrium[];
