@@ -1,5 +1,5 @@
 import { expect, test } from "vitest";
-import { explain, rules } from "../../kernel-helpers/index.js";
+import { changePoint, cycles, explain, recurrence, rules } from "../../kernel-helpers/index.js";
 import { bundleOf } from "../../kernel-helpers/tables/index.js";
 
 test("the catalogue shows itself as a table of all its rules", async () => {
@@ -8,7 +8,12 @@ test("the catalogue shows itself as a table of all its rules", async () => {
   expect(text).toContain("ΔB = r*B*(1 - B/K) - C");
 });
 
-test("explain without a word asks for one", () => {
+test("commands without what they need ask for it in words", () => {
+  const quadratic = recurrence("x[t+1] = 3.2*x*(1 - x)");
+  expect(() => cycles(quadratic, undefined as never)).toThrow("Which period? Give { period: 2 }");
+  expect(() => cycles(quadratic, {} as never)).toThrow("Which period? Give { period: 2 }");
+  expect(() => changePoint(undefined as never, undefined as never)).toThrow("No rule was given");
+  expect(() => changePoint(quadratic, undefined as never)).toThrow("No record was given");
   expect(() => explain(undefined as never)).toThrowErrorMatchingInlineSnapshot(
     `[ModelError: Which word? Give one of the trade, as in explain("fill rate").]`,
   );

@@ -1,5 +1,6 @@
 import type { StopReason } from "../../numeric/index.js";
 import { type Profile, profileInterval } from "../intervals/profile-interval.js";
+import type { ProfileProblem } from "../intervals/profile-walk.js";
 import { withoutFalseLimits } from "../intervals/without-false-limits.js";
 import type { Unknowns } from "../unknowns/unknowns.js";
 import type { Cut } from "./cut.js";
@@ -60,33 +61,39 @@ export function optimum(
   // From where a constant has run off no search comes back: the profile must be tried from before that as well.
   const others = hasRunOff(at, starts) ? [...ends, ...starts.slice(0, tries)] : ends;
   const problem = { objective, estimates: at, value: best.value, lower, upper, covariance, others, ...cut };
-  const profileFrom = (ends: readonly Float64Array[], i: number): Profile => {
-    const error = Math.sqrt(covariance[i * objective.size + i]!);
-    const usable = unscaled.determined[i] && error > 0 && Number.isFinite(error);
-    const spacing = usable ? error * Math.sqrt(cut.cut) : 0.1 * Math.abs(at[i]!) || 1;
-    return profileInterval({ ...problem, others: ends }, i, spacing);
-  };
-  const profiles = unknowns.names.map((_, i) => profileFrom(others, i));
+  const profiles = unknowns.names.map((_, i) => profileOf(problem, i, unscaled.determined[i]!));
   const better = profiles.find((profile) => profile.better !== undefined)?.better;
   if (better !== undefined && starts[0] !== better)
     return optimum(objective, unknowns, [better, ...starts], cutAt, withProfiles);
   const near = searches.filter(({ value }) => value - best.value < cut.cut * cut.variance);
-  const inside = [
-    ...near.map(({ estimates }) => estimates),
-    ...profiles.flatMap((profile) => profile.inside),
-  ];
-  const again = withoutFalseLimits(profiles, at, inside).map((profile, i) =>
-    profile === profiles[i] ? profile : profileFrom([...others, ...outermost(inside, i)], i),
-  );
-  const kept = withoutFalseLimits(again, at, [...inside, ...again.flatMap((profile) => profile.inside)]);
+  const ownEnds = near.map(({ estimates }) => estimates);
+  const kept = corrected(problem, profiles, ownEnds, unscaled.determined);
   const determined = unscaled.determined.map((known, i) => known && kept[i]!.firm);
   return { ...base, profiles: kept, determined };
 }
 
-/** The points at which unknown i is lowest and highest. */
-function outermost(points: readonly Float64Array[], i: number): readonly Float64Array[] {
-  const sorted = [...points].sort((a, b) => a[i]! - b[i]!);
-  return [sorted[0]!, sorted[sorted.length - 1]!];
+function profileOf(problem: ProfileProblem, i: number, known: boolean): Profile {
+  const { covariance, estimates, cut } = problem;
+  const error = Math.sqrt(covariance[i * estimates.length + i]!);
+  const usable = known && error > 0 && Number.isFinite(error);
+  const spacing = usable ? error * Math.sqrt(cut) : 0.1 * Math.abs(estimates[i]!) || 1;
+  return profileInterval(problem, i, spacing);
+}
+
+/** Profiles whose limits a point contradicts done again from that point; a limit still contradicted is dropped. */
+function corrected(
+  problem: ProfileProblem,
+  profiles: readonly Profile[],
+  ends: readonly Float64Array[],
+  known: readonly boolean[],
+): readonly Profile[] {
+  const inside = [...ends, ...profiles.flatMap((profile) => profile.inside)];
+  const again = withoutFalseLimits(profiles, problem.estimates, inside).map((profile, i) => {
+    if (profile === profiles[i]) return profile;
+    return profileOf({ ...problem, others: [...problem.others, ...outermost(inside, i)] }, i, known[i]!);
+  });
+  const all = [...inside, ...again.flatMap((profile) => profile.inside)];
+  return withoutFalseLimits(again, problem.estimates, all);
 }
 
 /** Whether some unknown lies this many times beyond where it was looked for. */
@@ -94,6 +101,12 @@ function hasRunOff(at: Float64Array, starts: readonly Float64Array[]): boolean {
   const farther = (value: number, start: number): boolean =>
     Math.abs(value) > runaway * Math.max(1, Math.abs(start));
   return at.some((value, i) => starts.some((start) => farther(value, start[i]!)));
+}
+
+/** The points at which unknown i is lowest and highest. */
+function outermost(points: readonly Float64Array[], i: number): readonly Float64Array[] {
+  const sorted = [...points].sort((a, b) => a[i]! - b[i]!);
+  return [sorted[0]!, sorted[sorted.length - 1]!];
 }
 
 /** The ends of searches, each once. */
