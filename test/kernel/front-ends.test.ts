@@ -52,4 +52,23 @@ describe.skipIf(!isThere(jupyter, "console", "--version"))("jupyter console", ()
     const done = await ran(jupyter, words, { cwd: folder, env, input });
     expect(plain(done.stdout), done.stderr).toContain("2400");
   });
+
+  /** A notebook's cells as they are typed here: a line each, the line breaks of a rule's text written out. */
+  const typed = (name: string): string =>
+    JSON.parse(readFileSync(join(notebooks, name), "utf8"))
+      .cells.filter((cell: { cell_type: string }) => cell.cell_type === "code")
+      .map((cell: { source: string[] }) =>
+        cell.source
+          .join("")
+          .replace(/`[^`]*`/g, (text) => text.replaceAll("\n", "\\n"))
+          .replaceAll("\n", " "),
+      )
+      .join("\n");
+
+  test.each(worked)("runs %s cell by cell", { timeout: 300_000 }, async (name) => {
+    const { folder, env } = placeForCases();
+    const words = ["console", "--kernel", "periodwise", "--simple-prompt"];
+    const done = await ran(jupyter, words, { cwd: folder, env, input: `${typed(name)}\nexit\n` });
+    expect(plain(done.stdout), done.stderr).toContain("Answer: ");
+  });
 });
