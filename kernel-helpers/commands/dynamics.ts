@@ -1,6 +1,7 @@
 import * as engine from "../../src/dynamics/index.js";
 import type { Rule } from "../../src/rule/index.js";
 import { showing } from "../tables/index.js";
+import { showAttractor } from "./show-attractor.js";
 import * as long from "./show-long-run.js";
 import * as steps from "./show-steps.js";
 import { shownTogether } from "./shown-together.js";
@@ -86,7 +87,7 @@ export const horizon = (rule: Rule, options: engine.HorizonOptions): engine.Hori
  * @example attractor(recurrence("x[t+1] = r*x*(1 - x)"), { constant: "r", from: 2, to: 4, columns: 3, points: 2, starts: [0.3] }).perColumn; // 2
  */
 export const attractor = (rule: Rule, options: engine.AttractorOptions): engine.Attractor =>
-  shown(engine.attractor(rule, options), long.showAttractor);
+  shown(engine.attractor(rule, options), showAttractor);
 
 /**
  * Next value against present value with the steps of a path between; the result shows the web.
