@@ -1,6 +1,6 @@
 import type { FindingLog } from "../finding-log.js";
 import type { DuplicateChoice } from "../observation-options.js";
-import type { ReplicateSpread } from "../observations.js";
+import type { ReplicateVariation } from "../observations.js";
 import type { PeriodAxis } from "../period/period-axis.js";
 import type { ReadColumns } from "../read-columns.js";
 import { pick } from "./pick.js";
@@ -14,7 +14,7 @@ export interface MergedRows {
   readonly used: number;
   readonly carry: (column: Float64Array) => Float64Array;
   readonly carrySide: (side: Int8Array) => Int8Array;
-  readonly spread: ((column: Float64Array) => ReplicateSpread) | undefined;
+  readonly spread: ((column: Float64Array) => ReplicateVariation) | undefined;
 }
 
 /** What to do with the rows of one period: by the choice for duplicates, or as technical replicates. */
@@ -86,7 +86,7 @@ function sideOf(run: Int32Array, side: Int8Array, merging: Merging): number {
   return Math.sign(run.reduce((sum, row) => sum + side[row]!, 0));
 }
 
-function spreadOf(runs: readonly Int32Array[], column: Float64Array): ReplicateSpread {
+function spreadOf(runs: readonly Int32Array[], column: Float64Array): ReplicateVariation {
   const count = Int32Array.from(runs, (run) => run.length);
   const deviation = Float64Array.from(runs, (run) => {
     const mean = combine(run, column, "average");
