@@ -1,16 +1,16 @@
 export type {
-  Best,
-  BestOptions,
   Measure,
   NextReading,
   NextReadingOptions,
-  Reach,
-  ReachOptions,
+  OptimizeOptions,
+  Optimum,
   Sensitivity,
   SensitivityOptions,
   Solved,
   SolveOptions,
   Target,
+  TimeToReach,
+  TimeToReachOptions,
   Tradeoff,
   TradeoffOptions,
 } from "../src/decision/index.js";
@@ -29,23 +29,22 @@ export type {
   CyclesOptions,
   Equilibria,
   EquilibriaOptions,
-  ExactPath,
-  ExactPathOptions,
-  Exponent,
-  ExponentOptions,
+  ExactTrajectory,
+  ExactTrajectoryOptions,
   HeldSetting,
-  Horizon,
-  HorizonOptions,
+  LyapunovExponent,
+  LyapunovExponentOptions,
   MatrixGrowth,
-  Path,
-  PathOptions,
+  PredictionHorizon,
+  PredictionHorizonOptions,
+  Trajectory,
+  TrajectoryOptions,
 } from "../src/dynamics/index.js";
 export {
   type Bootstrap,
   type BootstrapOptions,
   type Estimate,
   type EstimateChange,
-  type Extended,
   estimates,
   type Fit,
   type FitOptions,
@@ -54,6 +53,7 @@ export {
   type Interval,
   points,
   summary,
+  type UpdatedFit,
 } from "../src/estimate/index.js";
 export type {
   ChangePoint,
@@ -85,14 +85,16 @@ export type {
   Observations,
 } from "../src/record/index.js";
 export type { ReadOptions, WriteOptions } from "../src/store/index.js";
-export { answer, type CaseOptions, closeCase, openCase } from "./commands/case.js";
-export type { Domain } from "./commands/cautions.js";
-export { changePoint, densityDependence } from "./commands/change-points.js";
-export { check } from "./commands/checks.js";
-export { best, sensitivity, tradeoff } from "./commands/choices.js";
-export { compare } from "./commands/comparisons.js";
-export { correct, type DecisionsLog, decisionsLog, undo } from "./commands/corrections.js";
-export { nextReading, reaches, solveFor } from "./commands/decisions.js";
+export { frame, type RecordLike, sourceOf } from "./dataframe/index.js";
+export { type Figure, type FigureOptions, figure } from "./figures/index.js";
+export { answer, type CaseOptions, closeCase, openCase } from "./functions/case.js";
+export type { Domain } from "./functions/cautions.js";
+export { changePoint, densityDependence } from "./functions/change-points.js";
+export { check } from "./functions/checks.js";
+export { optimize, sensitivity, tradeoff } from "./functions/choices.js";
+export { compare } from "./functions/comparisons.js";
+export { correct, type DecisionsLog, decisionsLog, undo } from "./functions/corrections.js";
+export { nextReading, solveFor, timeToReach } from "./functions/decisions.js";
 export {
   attractor,
   basins,
@@ -101,34 +103,32 @@ export {
   cobweb,
   cycles,
   equilibria,
-  exactPath,
-  exponent,
-  horizon,
+  exactTrajectory,
+  lyapunovExponent,
   matrixGrowth,
-  path,
-} from "./commands/dynamics.js";
-export { type Explanation, explain } from "./commands/explain.js";
-export { fit } from "./commands/fits.js";
-export { expanding, fill, longer, regroup, rolling, shift, wider } from "./commands/frames.js";
-export { forecast, simulate } from "./commands/projections.js";
-export { propose } from "./commands/proposals.js";
+  predictionHorizon,
+  trajectory,
+} from "./functions/dynamics.js";
+export { type Explanation, explain } from "./functions/explain.js";
+export { fit } from "./functions/fits.js";
+export { expanding, fill, longer, rolling, shift, toPeriods, wider } from "./functions/frames.js";
+export { forecast, simulate } from "./functions/projections.js";
+export { propose } from "./functions/proposals.js";
 export {
   differences,
   observations,
   readRecord,
   writeRecord,
-} from "./commands/records.js";
-export { bootstrap, extend, gridInterval } from "./commands/resampling.js";
+} from "./functions/records.js";
+export { bootstrap, gridInterval, updateFit } from "./functions/resampling.js";
 export {
   type RecurrenceOptions,
   type Rule,
   type RuleCatalogue,
   recurrence,
   rules,
-} from "./commands/rules.js";
-export { show } from "./commands/show.js";
-export { frame, type RecordLike, sourceOf } from "./dataframe/index.js";
-export { type Figure, type FigureOptions, figure } from "./figures/index.js";
+} from "./functions/rules.js";
+export { show } from "./functions/show.js";
 export type { Term } from "./glossary/index.js";
 export { type Progress, progress, withProgress } from "./progress/index.js";
 export {

@@ -15,7 +15,7 @@ export interface Result {
 
 /** The tables of a fit. */
 export interface FitFrames {
-  /** A row a constant. */
+  /** A row a parameter. */
   readonly estimates: DataFrame;
   /** A row a period. */
   readonly points: DataFrame;

@@ -7,7 +7,7 @@ import { sharedScale } from "./shared-scale.js";
 export interface DrawnBand {
   /** Share of futures inside it: 0.8. */
   readonly level: number;
-  /** Which of the three kinds it is: "future observation", "mean path", "constant". */
+  /** Which of the three kinds it is: "future observation", "mean path", "parameter". */
   readonly of: string;
   readonly x: ArrayLike<number>;
   readonly lower: ArrayLike<number>;

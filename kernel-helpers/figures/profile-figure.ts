@@ -2,12 +2,12 @@ import { type Figure, figure, type Panel } from "./figure.js";
 import type { Layer } from "./layer.js";
 import { smoothProfile } from "./smooth-profile.js";
 
-/** How the fit worsens as one constant is held away from its estimate. */
+/** How the fit worsens as one parameter is held away from its estimate. */
 export interface DrawnProfile {
-  readonly constant: string;
+  readonly parameter: string;
   /** "" = none. */
   readonly unit: string;
-  /** Values the constant was held at, increasing. */
+  /** Values the parameter was held at, increasing. */
   readonly held: ArrayLike<number>;
   /** The measure of worsening at each, 0 at the estimate. */
   readonly worsening: ArrayLike<number>;
@@ -34,7 +34,7 @@ export interface ProfileFigureOptions {
 const heights = 2.6;
 
 /**
- * Profiles of constants, a panel each, with the cut-off and the interval it gives. The line between the computed
+ * Profiles of parameters, a panel each, with the cut-off and the interval it gives. The line between the computed
  * places is an arc (its signed root is drawn straight); an arrow at the cut-off says that
  * the record sets no limit on that side.
  */
@@ -43,8 +43,8 @@ export function profileFigure(options: ProfileFigureOptions): Figure {
   const alone = profiles.length === 1;
   const panels = profiles.map(
     (profile): Panel => ({
-      title: alone ? "" : profile.constant,
-      x: { title: profile.constant, unit: profile.unit },
+      title: alone ? "" : profile.parameter,
+      x: { title: profile.parameter, unit: profile.unit },
       y: { title: measure, ends: [0, heights * cut] },
       layers: profileLayers(profile, cut, level),
     }),
@@ -83,9 +83,9 @@ function noLimit(x: number, y: number, towards: "left" | "right"): Layer {
   };
 }
 
-function openEnds({ constant, lower, upper }: DrawnProfile): string[] {
+function openEnds({ parameter, lower, upper }: DrawnProfile): string[] {
   if (lower !== undefined && upper !== undefined) return [];
   const side =
     lower === undefined && upper === undefined ? "either side" : lower === undefined ? "below" : "above";
-  return [`This record sets no limit on ${constant} ${side}.`];
+  return [`This record sets no limit on ${parameter} ${side}.`];
 }

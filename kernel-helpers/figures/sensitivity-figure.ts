@@ -1,9 +1,9 @@
 import { type Axis, type Figure, figure } from "./figure.js";
 import { significant } from "./number-text.js";
 
-/** How an answer moves when one constant is lowered and raised. */
+/** How an answer moves when one parameter is lowered and raised. */
 export interface AnswerChange {
-  readonly constant: string;
+  readonly parameter: string;
   /** Change of the answer, in its unit. */
   readonly lowered: number;
   readonly raised: number;
@@ -14,23 +14,23 @@ export interface SensitivityFigureOptions {
   readonly title: string;
   /** What changes, with its unit. */
   readonly answer: Axis;
-  /** By how much each constant is moved: "one standard error", "ten per cent". The two are different figures. */
+  /** By how much each parameter is moved: "one standard error", "ten per cent". The two are different figures. */
   readonly by: string;
   readonly changes: readonly AnswerChange[];
   readonly notes?: readonly string[];
 }
 
-/** Change of an answer for a small change of each constant: bars to both sides of no change, the longest on top. */
+/** Change of an answer for a small change of each parameter: bars to both sides of no change, the longest on top. */
 export function sensitivityFigure(options: SensitivityFigureOptions): Figure {
   const { title, answer, by, changes, notes = [] } = options;
   const reach = ({ lowered, raised }: AnswerChange): number => Math.max(Math.abs(lowered), Math.abs(raised));
   const sorted = [...changes].sort((a, b) => reach(b) - reach(a));
-  const names = sorted.map(({ constant }) => constant);
+  const names = sorted.map(({ parameter }) => parameter);
   const [first] = sorted;
   return figure({
     title,
     x: answer,
-    y: { title: "Constant", scale: "category" },
+    y: { title: "Parameter", scale: "category" },
     layers: [
       {
         mark: "bars",
@@ -51,7 +51,7 @@ export function sensitivityFigure(options: SensitivityFigureOptions): Figure {
     ],
     notes,
     summary: first
-      ? `${first.constant} moves the answer most: by up to ${significant(reach(first))} ${answer.unit ?? ""}`.trim() +
+      ? `${first.parameter} moves the answer most: by up to ${significant(reach(first))} ${answer.unit ?? ""}`.trim() +
         "."
       : "",
   });

@@ -11,7 +11,7 @@ const between = 12;
 /**
  * A profile as a smooth line through the places where it was computed, as far as it matters.
  *
- * The signed root of the worsening is nearly a straight line in the constant (Bates and Watts 1988, section 6.1), so
+ * The signed root of the worsening is nearly a straight line in the parameter (Bates and Watts 1988, section 6.1), so
  * it is the root that is drawn straight between the places, and its square is the arc shown.
  *
  * @param highest - worsening beyond which nothing is drawn.

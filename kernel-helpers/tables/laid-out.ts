@@ -114,7 +114,7 @@ function footnoteMarks(notes: Table["notes"]): {
 
 /**
  * Pads numbers on the right, so that decimal signs stand under each other in a right-aligned column. Estimates are
- * left as they are: a column of them holds constants of different sizes, with nothing to compare.
+ * left as they are: a column of them holds parameters of different sizes, with nothing to compare.
  */
 function alignFractions(texts: string[][], columns: readonly Column[], decimal: string): void {
   columns.forEach((column, j) => {

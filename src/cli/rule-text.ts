@@ -44,7 +44,7 @@ function aboutWhole(text: string): string | undefined {
 function declared(given: unknown): RecurrenceOptions | undefined {
   if (given === undefined) return {};
   if (typeof given !== "object" || given === null) return undefined;
-  const wanted = Object.entries(given).filter(([name]) => name === "constants" || name === "inputs");
+  const wanted = Object.entries(given).filter(([name]) => name === "parameters" || name === "inputs");
   return wanted.every(([, value]) => value !== undefined) ? Object.fromEntries(wanted) : undefined;
 }
 

@@ -1,4 +1,4 @@
-export { type Best, type BestOptions, best } from "./choice/best.js";
+export { type OptimizeOptions, type Optimum, optimize } from "./choice/optimize.js";
 export {
   type Sensitivity,
   type SensitivityOptions,
@@ -11,8 +11,8 @@ export { type Tradeoff, type TradeoffOptions, tradeoff } from "./choice/tradeoff
 export type { Measure } from "./measure/measure.js";
 export type { AcrossUnits } from "./reach/across-units.js";
 export type { DeltaMargin } from "./reach/delta-margin.js";
-export type { GroupReach, Reach, ReachOptions } from "./reach/reach.js";
-export { reaches } from "./reach/reaches.js";
+export type { GroupReach, TimeToReach, TimeToReachOptions } from "./reach/reach.js";
+export { timeToReach } from "./reach/time-to-reach.js";
 export {
   type NextReading,
   type NextReadingOptions,

@@ -84,7 +84,7 @@ export function refuseMeasureWindow(from: number, to: number, ahead: number): Mo
 export function refuseNoChance(state: string): ModelError {
   return new ModelError(
     "nothing-random",
-    `The risk of ${state} needs a rule with random change. Give it: noise: { ${state}: { kind: "additive", sd: 1 } }, or ask for a time instead.`,
+    `The risk of ${state} needs a rule with random change. Give it: noise: { ${state}: { distribution: "normal", sd: 1 } }, or ask for a time instead.`,
     { state },
   );
 }
@@ -103,7 +103,7 @@ export function refuseNoEffect(unknown: string, measure: string): ModelError {
 export function refuseNoRange(unknown: string): ModelError {
   return new ModelError(
     "no-range",
-    `Nothing says where ${unknown} may lie. Give the lowest and the highest value with { between: [low, high] }.`,
+    `Nothing says where ${unknown} may lie. Give the lowest and the highest value with { range: [low, high] }.`,
     { unknown },
   );
 }
@@ -141,7 +141,7 @@ export function refusePastAlready(past: string): ModelError {
 export function refuseNoObjective(): ModelError {
   return new ModelError(
     "no-objective",
-    'Say what is to be best: either { most } or { least }, with one measure, such as most: { total: "yield" }.',
+    'Say what is to be best: either { maximize } or { minimize }, with one measure, such as maximize: { total: "yield" }.',
   );
 }
 

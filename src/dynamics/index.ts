@@ -13,20 +13,42 @@ export {
   bifurcations,
 } from "./cycle/bifurcations.js";
 export { type Cycle, type Cycles, type CyclesOptions, cycles } from "./cycle/cycles.js";
-export { type ExactPath, type ExactPathOptions, type ExactValue, exactPath } from "./exact/exact-path.js";
+export {
+  type ExactTrajectory,
+  type ExactTrajectoryOptions,
+  type ExactValue,
+  exactTrajectory,
+} from "./exact/exact-trajectory.js";
 export { type Attractor, type AttractorOptions, attractor } from "./long-run/attractor.js";
 export { type Basin, type Basins, type BasinsOptions, basins } from "./long-run/basins.js";
 export { type Cobweb, type CobwebOptions, cobweb } from "./long-run/cobweb.js";
-export { type Exponent, type ExponentOptions, exponent } from "./long-run/exponent.js";
-export { type Horizon, type HorizonOptions, horizon } from "./long-run/horizon.js";
+export {
+  type LyapunovExponent,
+  type LyapunovExponentOptions,
+  lyapunovExponent,
+} from "./long-run/lyapunov-exponent.js";
 export { type MatrixGrowth, matrixGrowth } from "./long-run/matrix-growth.js";
+export {
+  type PredictionHorizon,
+  type PredictionHorizonOptions,
+  predictionHorizon,
+} from "./long-run/prediction-horizon.js";
 export { type NoiseStream, noiseCapacity, noiseStream } from "./noise/noise-stream.js";
-export { type GuaranteedDigits, type GuaranteedOptions, guaranteedDigits } from "./path/guaranteed-digits.js";
-export { type Path, type PathOptions, type PathStop, path } from "./path/path.js";
 export { type Equilibria, type EquilibriaOptions, type Equilibrium, equilibria } from "./rest/equilibria.js";
 export type { Multiplier } from "./rest/multiplier.js";
 export type { Stability } from "./rest/stability.js";
 export type { HeldSetting } from "./setting/held-step.js";
 export type { InputValues } from "./setting/input-columns.js";
 export type { SearchRange } from "./setting/search-range.js";
-export { constantsBySlot, type InitialValues, initialVector } from "./setting/setting.js";
+export { type InitialValues, initialVector, parametersBySlot } from "./setting/setting.js";
+export {
+  type GuaranteedDigits,
+  type GuaranteedOptions,
+  guaranteedDigits,
+} from "./trajectory/guaranteed-digits.js";
+export {
+  type Trajectory,
+  type TrajectoryOptions,
+  type TrajectoryStop,
+  trajectory,
+} from "./trajectory/trajectory.js";

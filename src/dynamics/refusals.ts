@@ -69,7 +69,7 @@ export function oneStateOnly(what: string, states: readonly string[]): ModelErro
 export function changesWithTime(what: string): ModelError {
   return new ModelError(
     "rule-changes-with-time",
-    `The rule reads the period index t, so it has no ${what} that stays. Hold t by writing its value as a constant.`,
+    `The rule reads the period index t, so it has no ${what} that stays. Hold t by writing its value as a parameter.`,
   );
 }
 
@@ -100,7 +100,7 @@ export function outsideRange(title: string, condition: string, values: string): 
 export function noClosedForm(title: string): ModelError {
   return new ModelError(
     "no-closed-form",
-    `${title} has no closed form that is known here for these constants. Step it with path; equilibria and cycles say where it goes in the long run.`,
+    `${title} has no closed form that is known here for these parameters. Step it with path; equilibria and cycles say where it goes in the long run.`,
     { title },
   );
 }
@@ -108,7 +108,7 @@ export function noClosedForm(title: string): ModelError {
 export function notAMatrixRule(): ModelError {
   return new ModelError(
     "not-a-matrix-rule",
-    "The long run of a matrix is asked for, and this rule is no matrix with a positive dominant root: each line must be a sum of constants times states, as in n1[t+1] = f1*n1 + f2*n2. Use equilibria for other systems.",
+    "The long run of a matrix is asked for, and this rule is no matrix with a positive dominant root: each line must be a sum of parameters times states, as in n1[t+1] = f1*n1 + f2*n2. Use equilibria for other systems.",
   );
 }
 

@@ -11,7 +11,7 @@ import { refuseMissingArgument } from "./refusals.js";
 import type { Estimate } from "./result/estimate-of.js";
 import type { GroupFit } from "./result/group-fit.js";
 
-/** A rule with its constants estimated from a record, each group on its own. */
+/** A rule with its parameters estimated from a record, each group on its own. */
 export interface Fit {
   readonly kind: "fit";
   readonly rule: Rule;
@@ -19,7 +19,7 @@ export interface Fit {
   readonly observations: Observations;
   readonly options: FitOptions;
   readonly groups: readonly GroupFit[];
-  /** Of groups fitted together: the constants that hold for all, or their means and spreads among the groups. */
+  /** Of groups fitted together: the parameters that hold for all, or their means and spreads among the groups. */
   readonly population?: readonly Estimate[];
   readonly warnings: readonly Warning[];
   /** The conventions behind the numbers, as printed with every table of the fit. */
@@ -27,11 +27,11 @@ export interface Fit {
 }
 
 /**
- * Estimates the constants of a rule from a record by least squares.
+ * Estimates the parameters of a rule from a record by least squares.
  *
  * `errors: "observation"` minimises sum (y_t - x_t)^2 over the whole trajectory x of the rule, its initial
  * state among the unknowns; `errors: "process"` minimises sum (y_{t+k} - f^k(y_t))^2 over recorded pairs.
- * With `spread: "proportional"` the differences are of logarithms.
+ * With `distribution: "lognormal"` the differences are of logarithms.
  *
  * @param rule - from `recurrence(...)`; unit of a state = unit of its recorded values.
  * @param observations - per group at least as many values (pairs) as unknowns + 3; gaps stay gaps.

@@ -1,8 +1,7 @@
-export { type EstimateChange, type Extended, extend } from "./extend.js";
 export { type Fit, fit } from "./fit.js";
 export { type GridIntervalOptions, gridInterval } from "./intervals/grid-interval.js";
 export type { Interval } from "./intervals/interval.js";
-export type { ErrorKind, FitOptions, Spread } from "./options/fit-options.js";
+export type { ErrorDistribution, ErrorKind, FitOptions } from "./options/fit-options.js";
 export {
   type Bootstrap,
   type BootstrapOptions,
@@ -20,3 +19,4 @@ export { type SecondOpinion, secondOpinion } from "./second-opinion.js";
 export { normalEquations } from "./systems/normal-equations.js";
 export { type Prepared, prepared } from "./systems/prepared.js";
 export { type Unknowns, unknownsOf } from "./unknowns/unknowns.js";
+export { type EstimateChange, type UpdatedFit, updateFit } from "./update-fit.js";

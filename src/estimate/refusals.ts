@@ -66,7 +66,7 @@ export function refuseTooFew(
   return new ModelError(
     "too-few-observations",
     `${usable} usable ${what}${named(group)} for ${unknowns.length} unknowns (${unknowns.join(", ")}): not fitted. ` +
-      `At least ${unknowns.length + 3} are needed; use a rule with fewer constants, fix some with { fixed }, or wait for more rows.`,
+      `At least ${unknowns.length + 3} are needed; use a rule with fewer parameters, fix some with { fixed }, or wait for more rows.`,
     { group: group.name, usable, unknowns },
   );
 }
@@ -83,8 +83,8 @@ export function refuseNoChange(group: ObservedGroup, value: number): ModelError 
 export function refuseNoLogarithm(group: ObservedGroup, row: number, value: number): ModelError {
   return new ModelError(
     "no-logarithm",
-    `Row ${row}${named(group)}: level ${value} has no logarithm, which proportional spread needs. Choose ` +
-      '{ spread: "constant" }, or leave the row out with a reason.',
+    `Row ${row}${named(group)}: level ${value} has no logarithm, which a lognormal distribution needs. Choose ` +
+      '{ distribution: "normal" }, or leave the row out with a reason.',
     { group: group.name, row, value },
   );
 }
@@ -92,7 +92,7 @@ export function refuseNoLogarithm(group: ObservedGroup, row: number, value: numb
 export function refuseNoStart(group: ObservedGroup, ruleText: string): ModelError {
   return new ModelError(
     "no-finite-start",
-    `No constants were found at which "${ruleText}" stays finite over the record${named(group)}. Give ` +
+    `No parameters were found at which "${ruleText}" stays finite over the record${named(group)}. Give ` +
       "{ start: { ... } } near plausible values, or { bounds: { ... } } that keep the rule in its range.",
     { group: group.name, rule: ruleText },
   );
@@ -101,8 +101,8 @@ export function refuseNoStart(group: ObservedGroup, ruleText: string): ModelErro
 export function refuseNoCount(group: ObservedGroup, row: number, value: number): ModelError {
   return new ModelError(
     "not-a-count",
-    `Row ${row}${named(group)}: ${value} is not a count, which a Poisson or negative binomial spread needs. Give whole ` +
-      'numbers from 0, or choose { spread: "constant" } or { spread: "proportional" }.',
+    `Row ${row}${named(group)}: ${value} is not a count, which a Poisson or negative binomial distribution needs. Give whole ` +
+      'numbers from 0, or choose { distribution: "normal" } or { distribution: "lognormal" }.',
     { group: group.name, row, value },
   );
 }
@@ -128,26 +128,30 @@ export function refuseInputGap(input: string, group: ObservedGroup, period: numb
 export function refuseJumps(name: string, ruleText: string): ModelError {
   return new ModelError(
     "rule-jumps",
-    `"${ruleText}" jumps at ${name}(...), so its constants have no best value that a search could find: small changes of them change ` +
+    `"${ruleText}" jumps at ${name}(...), so its parameters have no best value that a search could find: small changes of them change ` +
       "nothing, and then a whole step. Fit the rule without the rounding; keep it for schedules and projections.",
     { function: name, rule: ruleText },
   );
 }
 
-export function refuseSpread(sd: number): ModelError {
+export function refuseSd(sd: number, distribution: string): ModelError {
+  const counts = distribution === "poisson" || distribution === "negative-binomial";
+  const remedy = counts
+    ? `Leave it out: the variance of "${distribution}" counts follows from their mean.`
+    : "Give a positive number: in the unit of the record for `normal`, on the log scale for `lognormal`.";
   return new ModelError(
-    "bad-spread",
-    `The standard deviation ${sd} of { spread: { sd } } is not a positive number. Give it in the unit of the record.`,
-    { sd },
+    "invalid-sd",
+    `Option \`sd\` is ${sd}, with \`distribution: "${distribution}"\`. ${remedy}`,
+    { sd, distribution },
   );
 }
 
-export function refuseUnknownSpread(spread: unknown): ModelError {
+export function refuseUnknownDistribution(distribution: unknown): ModelError {
   return new ModelError(
-    "unknown-spread",
-    `There is no fit with the spread ${String(spread)}. Choose "constant", "proportional", "poisson", "negative-binomial" or ` +
-      "{ sd }; counts only with errors in the process or in the observation.",
-    { spread },
+    "unknown-distribution",
+    `Option \`distribution\` must be "normal", "lognormal", "poisson" or "negative-binomial"; ${String(distribution)} was given. ` +
+      'Counts go with `errors: "process"` or `errors: "observation"`.',
+    { distribution },
   );
 }
 
@@ -188,7 +192,7 @@ export function refuseTogether(how: string): ModelError {
 export function refuseFewGroups(count: number): ModelError {
   return new ModelError(
     "too-few-groups",
-    `${count} groups do not tell how constants spread among groups. Give at least 3, better 6, or fit { groups: "combined" }.`,
+    `${count} groups do not tell how parameters spread among groups. Give at least 3, better 6, or fit { groups: "combined" }.`,
     { count },
   );
 }
@@ -219,7 +223,7 @@ export function refuseNoResiduals(): ModelError {
 export function refuseRobust(): ModelError {
   return new ModelError(
     "robust-not-by-squares",
-    'Far-off values count for less only in fits by least squares of each group on its own. Drop { robust: true }, or fit with a "constant" ' +
-      'or "proportional" spread and { groups: "separate" }.',
+    'Far-off values count for less only in fits by least squares of each group on its own. Drop { robust: true }, or fit with a "normal" ' +
+      'or "lognormal" spread and { groups: "separate" }.',
   );
 }

@@ -63,7 +63,7 @@ const notLeastSquares = "No second solver: the fit is not one of least squares o
 function isOneLeastSquares({ options }: Fit, { estimates }: GroupFit): boolean {
   const alone = (options.groups ?? "separate") === "separate";
   return (
-    alone && options.robust !== true && bySquares(options) && estimates.every(({ role }) => role !== "spread")
+    alone && options.robust !== true && bySquares(options) && estimates.every(({ role }) => role !== "scale")
   );
 }
 

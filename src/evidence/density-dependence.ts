@@ -7,11 +7,11 @@ export interface DensityOptions {
   /** Default: the only state. */
   readonly state?: string;
   /** Records drawn without density dependence; default 1999. */
-  readonly draws?: number;
+  readonly resamples?: number;
   /** Default 1. */
   readonly seed?: number;
-  /** Probability below which density dependence is called; default 0.05. */
-  readonly alpha?: number;
+  /** Confidence above which density dependence is called; default 0.95, a test at 5%. */
+  readonly level?: number;
 }
 
 /** Whether growth falls with the level in one group. */
@@ -33,8 +33,8 @@ export interface GroupDensity {
 /** A test of density dependence. */
 export interface DensityDependence {
   readonly kind: "density-dependence";
-  readonly draws: number;
-  readonly alpha: number;
+  readonly resamples: number;
+  readonly level: number;
   readonly groups: readonly GroupDensity[];
   readonly sentence: string;
 }
@@ -55,23 +55,29 @@ export function densityDependence(
   observations: Observations,
   options: DensityOptions = {},
 ): DensityDependence {
-  const { draws = 1999, seed = 1, alpha = 0.05 } = options;
+  const { resamples = 1999, seed = 1, level = 0.95 } = options;
   const state = options.state ?? observations.states[0]!.name;
   let stream = randomStream(seed);
   const groups = observations.groups.map((group) => {
     const own = stream;
     stream = stream.jump();
-    return groupDensity(group, state, draws, alpha, own);
+    return groupDensity(group, state, resamples, level, own);
   });
   const sentence = groups.map((group) => group.sentence).join(" ");
-  return Object.freeze({ kind: "density-dependence", draws, alpha, groups: Object.freeze(groups), sentence });
+  return Object.freeze({
+    kind: "density-dependence",
+    resamples,
+    level,
+    groups: Object.freeze(groups),
+    sentence,
+  });
 }
 
 function groupDensity(
   group: ObservedGroup,
   state: string,
-  draws: number,
-  alpha: number,
+  resamples: number,
+  level: number,
   stream: RandomStream,
 ): GroupDensity {
   const values = group.values[state];
@@ -81,19 +87,19 @@ function groupDensity(
     throw refuseNoDensity(group.name, state);
   let below = 1;
   const drawn = new Float64Array(logs.length);
-  for (let k = 0; k < draws; k++) {
+  for (let k = 0; k < resamples; k++) {
     walk(logs[0]!, line.growth, line.deviation, group.index, stream, drawn);
     if ((lineOf(drawn, group.index)?.statistic ?? 0) <= line.statistic) below++;
   }
-  const probability = below / (draws + 1);
+  const probability = below / (resamples + 1);
   const found = {
     steps: line.steps,
     intercept: line.intercept,
     slope: line.slope,
     statistic: line.statistic,
   };
-  const sentence = sentenceOf(group.name, probability, alpha, line.steps);
-  return { group: group.name, ...found, probability, found: probability <= alpha, sentence };
+  const sentence = sentenceOf(group.name, probability, level, line.steps);
+  return { group: group.name, ...found, probability, found: probability <= 1 - level, sentence };
 }
 
 /** Regression of growth on level, over pairs one period apart; undefined where fewer than 4 of them. */
@@ -146,10 +152,10 @@ function walk(
   }
 }
 
-function sentenceOf(group: string, probability: number, alpha: number, steps: number): string {
+function sentenceOf(group: string, probability: number, level: number, steps: number): string {
   const who = group === "" ? "" : `${group}: `;
   const chance = probability < 0.001 ? "less than 0.1%" : `${(100 * probability).toFixed(1)}%`;
-  return probability <= alpha
+  return probability <= 1 - level
     ? `${who}Growth falls with the level: chance alone gives a fall as steep in ${chance} of records (${steps} steps).`
     : `${who}The record does not show that growth falls with the level: chance alone gives a fall as steep in ${chance} of records (${steps} steps).`;
 }

@@ -47,7 +47,7 @@ export function refuseNoDates(group: string, count: number): ModelError {
   return new ModelError(
     "too-short-for-a-break",
     `${count} steps${who} leave no date with enough of them on either side to fit the rule twice. Use a rule with ` +
-      "fewer constants, hold some with { fixed }, or wait for more rows.",
+      "fewer parameters, hold some with { fixed }, or wait for more rows.",
     { group, count },
   );
 }

@@ -26,7 +26,7 @@ export function badSeed(seed: unknown): ModelError {
 export function residualsOfOtherLength(expected: number, found: number): ModelError {
   return new ModelError(
     "residuals-of-other-length",
-    `The residual function gave ${found} values after giving ${expected} at the start. Give one residual for every observation, at whatever constants; where the model is not defined, give NaN.`,
+    `The residual function gave ${found} values after giving ${expected} at the start. Give one residual for every observation, at whatever parameters; where the model is not defined, give NaN.`,
     { expected, found },
   );
 }
@@ -34,7 +34,7 @@ export function residualsOfOtherLength(expected: number, found: number): ModelEr
 export function jacobianOfOtherShape(rows: number, size: number, found: number): ModelError {
   return new ModelError(
     "jacobian-of-other-shape",
-    `The Jacobian has ${found} entries, but ${rows} residuals by ${size} constants need ${rows * size}. Give it row after row: the derivatives of the first residual by every constant come first.`,
+    `The Jacobian has ${found} entries, but ${rows} residuals by ${size} parameters need ${rows * size}. Give it row after row: the derivatives of the first residual by every parameter come first.`,
     { rows, size, found },
   );
 }
@@ -42,7 +42,7 @@ export function jacobianOfOtherShape(rows: number, size: number, found: number):
 export function tooFewResiduals(rows: number, size: number): ModelError {
   return new ModelError(
     "too-few-residuals",
-    `${rows} residuals cannot determine ${size} constants. Give at least as many residuals as constants, or hold some constants fixed.`,
+    `${rows} residuals cannot determine ${size} parameters. Give at least as many residuals as parameters, or hold some parameters fixed.`,
     { rows, size },
   );
 }
@@ -50,7 +50,7 @@ export function tooFewResiduals(rows: number, size: number): ModelError {
 export function badStart(position: number, value: number): ModelError {
   return new ModelError(
     "bad-start",
-    `Start value ${position + 1} is ${value}. Give a finite number to start every constant from.`,
+    `Start value ${position + 1} is ${value}. Give a finite number to start every parameter from.`,
     { position, value },
   );
 }
@@ -58,15 +58,15 @@ export function badStart(position: number, value: number): ModelError {
 export function badBounds(position: number, lower: number, upper: number): ModelError {
   return new ModelError(
     "bad-bounds",
-    `Constant ${position + 1} has the lower bound ${lower} and the upper bound ${upper}. Give a lower bound that is not above the upper one.`,
+    `Parameter ${position + 1} has the lower bound ${lower} and the upper bound ${upper}. Give a lower bound that is not above the upper one.`,
     { position, lower, upper },
   );
 }
 
 export function otherNumberOf(what: string, expected: number, found: number): ModelError {
   return new ModelError(
-    "other-number-of-constants",
-    `The start has ${expected} constants but ${what} has ${found} entries. Give one entry a constant, in the same order.`,
+    "other-number-of-parameters",
+    `The start has ${expected} parameters but ${what} has ${found} entries. Give one entry a parameter, in the same order.`,
     { what, expected, found },
   );
 }

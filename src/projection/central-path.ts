@@ -4,7 +4,7 @@ import type { CompiledRule, Rule } from "../rule/index.js";
 export interface Ground {
   readonly rule: Rule;
   readonly compiled: CompiledRule;
-  readonly constants: Float64Array;
+  readonly parameters: Float64Array;
   /** The state vector at `from`, past values included. */
   readonly initial: Float64Array;
   /** One column an input, by absolute period. */
@@ -34,7 +34,7 @@ export function centralPath(ground: Ground): CentralPath {
   const { rule, compiled, periods } = ground;
   const width = ground.initial.length;
   const table = new Float64Array((periods + 1) * width);
-  compiled.path(ground.initial, ground.constants, ground.inputs, ground.from, periods, table);
+  compiled.path(ground.initial, ground.parameters, ground.inputs, ground.from, periods, table);
   const limits = stateLimits(rule);
   const rows = periods + 1;
   const bad = (row: number): number =>

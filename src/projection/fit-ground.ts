@@ -12,7 +12,7 @@ export interface FitGround extends Ground {
   readonly recorded: ObservedGroup;
   /** Step index of the last recorded value. */
   readonly recordEnd: number;
-  /** By unknown of the fit: slot among constants, then state vector; -1 where the path does not begin with it. */
+  /** By unknown of the fit: slot among parameters, then state vector; -1 where the path does not begin with it. */
   readonly places: Int32Array;
   /** Where a filter leaves the present state uncertain: its mean and covariance, on the log scale or not. */
   readonly belief?: { readonly mean: Float64Array; readonly covariance: Float64Array; readonly log: boolean };
@@ -38,16 +38,16 @@ export function fitGround(fit: Fit, group: GroupFit, periods: number, plans: Inp
     if (trajectory) return fittedStart(fit, group, names[s]!, state, lag);
     return recordedAt(recorded, state, recordEnd - lag);
   });
-  const width = rule.constants.length;
+  const width = rule.parameters.length;
   const places = Int32Array.from(group.estimates, ({ name, role }) => {
-    if (role === "constant") return rule.constants.indexOf(name);
+    if (role === "parameter") return rule.parameters.indexOf(name);
     const slot = names.indexOf(name);
     return slot < 0 || !trajectory ? -1 : width + slot;
   });
   return {
     rule,
     compiled: compileRule(rule),
-    constants: Float64Array.from(rule.constants, (name) => group.constants[name]!),
+    parameters: Float64Array.from(rule.parameters, (name) => group.parameters[name]!),
     initial,
     inputs: fittedInputs(rule, recorded, recordEnd, periods, plans),
     from,
@@ -65,7 +65,7 @@ function beliefOf(fit: Fit, { filter }: GroupFit): FitGround["belief"] {
   return {
     mean: Float64Array.from(filter.last.mean),
     covariance: Float64Array.from(filter.last.covariance),
-    log: fit.options.spread === "proportional",
+    log: fit.options.distribution === "lognormal",
   };
 }
 

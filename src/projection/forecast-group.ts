@@ -3,7 +3,6 @@ import type { RandomStream } from "../numeric/index.js";
 import { readsPeriod } from "../rule/index.js";
 import { type CentralPath, centralPath, stateLimits } from "./central-path.js";
 import { keepLimit } from "./check-run.js";
-import { type DrawnStarts, drawnStarts, type UnknownsDraw, unknownsDraw } from "./constants/drawn-starts.js";
 import { blockStreams } from "./ensemble/block-streams.js";
 import { type EnsembleRun, runEnsemble } from "./ensemble/ensemble.js";
 import { type Gatherer, gatherer } from "./ensemble/gather.js";
@@ -14,6 +13,7 @@ import { forecastWarnings } from "./forecast-warnings.js";
 import type { Scenario } from "./inputs/scenarios.js";
 import { fittedNoise } from "./noise/fitted-noise.js";
 import { noiseDraw } from "./noise/noise.js";
+import { type DrawnStarts, drawnStarts, type UnknownsDraw, unknownsDraw } from "./parameters/drawn-starts.js";
 import { periodLabels } from "./period-labels.js";
 import { type Predictability, predictabilityOf } from "./predictability.js";
 import type { GroupForecast } from "./projected-group.js";
@@ -77,7 +77,7 @@ function projected(
       median: futures[s]!.median,
       bands: [...means[s]!.bands, ...futures[s]!.bands],
     })),
-    draws: {
+    ensemble: {
       paths: options.paths,
       periods,
       mean: means.flatMap((state) => state.paths ?? []),
@@ -155,9 +155,9 @@ function passagesFor(fit: Fit, mean: Gatherer, future: Gatherer): readonly Float
 }
 
 function predicted(ground: FitGround, starts: DrawnStarts, firstError: number): Predictability | undefined {
-  const { rule, compiled, constants, initial } = ground;
+  const { rule, compiled, parameters, initial } = ground;
   if (rule.inputs.length > 0 || readsPeriod(rule)) return undefined;
-  const own = { paths: 1, size: constants.length, constants, initial };
+  const own = { paths: 1, size: parameters.length, parameters, initial };
   return predictabilityOf(compiled, initial.length, own, starts, firstError);
 }
 
@@ -167,7 +167,7 @@ function withHorizon(
   predictability: Predictability | undefined,
   recordEnd: number,
 ): CentralPath["values"] {
-  const horizon = predictability?.horizon;
+  const horizon = predictability?.predictionHorizon;
   if (horizon === undefined) return central.values;
   return central.values.map((values) =>
     values.map((value, t) => (t <= recordEnd + horizon ? value : Number.NaN)),

@@ -1,8 +1,8 @@
 import type { GroupFit } from "../estimate/index.js";
 import type { Warning } from "../numeric/index.js";
 import type { CentralPath } from "./central-path.js";
-import type { DrawnStarts } from "./constants/drawn-starts.js";
 import type { FitGround } from "./fit-ground.js";
+import type { DrawnStarts } from "./parameters/drawn-starts.js";
 import type { Predictability } from "./predictability.js";
 import { rangeWarnings } from "./range-warnings.js";
 import { recordedSignWarnings } from "./recorded-sign.js";
@@ -30,7 +30,7 @@ const worthTelling = 0.05;
 export function forecastWarnings(source: WarningSource): Warning[] {
   const { central, left, starts, ground } = source;
   return [
-    ...openConstants(source),
+    ...openParameters(source),
     ...discardedDraws(starts),
     ...rangeWarnings(central, ground.from, left, starts.paths),
     ...recordedSignWarnings(source),
@@ -39,14 +39,14 @@ export function forecastWarnings(source: WarningSource): Warning[] {
   ];
 }
 
-function openConstants({ group, starts }: WarningSource): Warning[] {
+function openParameters({ group, starts }: WarningSource): Warning[] {
   const open = group.estimates.filter((estimate) => estimate.standardError === undefined);
   if (open.length === 0) return [];
   const names = open.map((estimate) => estimate.name).join(", ");
   return [
     {
-      code: "constants-not-determined",
-      message: `The record does not determine ${names}: constants were drawn ${starts.method}${starts.followed === undefined ? "" : ` of ${starts.followed}`}, and where the bands have no end the record gives none.`,
+      code: "parameters-not-determined",
+      message: `The record does not determine ${names}: parameters were drawn ${starts.method}${starts.followed === undefined ? "" : ` of ${starts.followed}`}, and where the bands have no end the record gives none.`,
     },
   ];
 }
@@ -56,7 +56,7 @@ function discardedDraws({ discarded, paths }: DrawnStarts): Warning[] {
   return [
     {
       code: "draws-discarded",
-      message: `${discarded} draws were discarded because a constant left its bounds, for ${paths} kept: near a bound the bands are cut.`,
+      message: `${discarded} draws were discarded because a parameter left its bounds, for ${paths} kept: near a bound the bands are cut.`,
     },
   ];
 }
@@ -75,7 +75,7 @@ function beyondRecord({ asked, ground }: WarningSource): Warning[] {
 function partingPaths(found: Predictability | undefined): Warning[] {
   if (found === undefined || found.chaotic < worthTelling) return [];
   const share = `P(exponent > 0) = ${found.chaotic.toFixed(2)} (Monte-Carlo error ${found.chaoticError.toPrecision(1)})`;
-  if (found.horizon === undefined)
+  if (found.predictionHorizon === undefined)
     return [
       {
         code: "perhaps-chaotic",
@@ -88,7 +88,7 @@ function partingPaths(found: Predictability | undefined): Warning[] {
       code: "chaotic",
       message:
         `Long-range point projection is meaningless when the exponent is positive; ${share}. The point path ends ` +
-        `${found.horizon} periods ahead; after that 95% of values lie from ${lower.toPrecision(3)} to ${upper.toPrecision(3)}, whatever the start.`,
+        `${found.predictionHorizon} periods ahead; after that 95% of values lie from ${lower.toPrecision(3)} to ${upper.toPrecision(3)}, whatever the start.`,
     },
   ];
 }

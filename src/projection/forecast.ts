@@ -16,10 +16,10 @@ export interface Forecast {
 }
 
 /**
- * Carries a fit forward: the path at the estimates, and bands from drawn constants without (`mean path`) and with
+ * Carries a fit forward: the path at the estimates, and bands from drawn parameters without (`mean path`) and with
  * (`future observation`) the errors of single values.
  *
- * Constants are drawn from a multivariate t around the estimates, sigma with them, or along the profile where the
+ * Parameters are drawn from a multivariate t around the estimates, sigma with them, or along the profile where the
  * record leaves one open. With errors in the observation the rule runs from its initial state and the reading's error is added on top;
  * with errors in the process it runs from the last recorded value and every step has its own error.
  *
@@ -27,7 +27,7 @@ export interface Forecast {
  * predictability; beyond it stand the bands, with a warning.
  *
  * @returns per group and scenario central path, bands [index] in the state's unit, and the draws themselves.
- * @throws {ModelError} `periods-not-whole` | `future-input-missing` | `constants-not-separated` | `no-finite-path` |
+ * @throws {ModelError} `periods-not-whole` | `future-input-missing` | `parameters-not-separated` | `no-finite-path` |
  *   `history-missing` | `no-draw-in-bounds`.
  * @example forecast(fitted, { periods: 12 }).groups[0].states[0].central.length; // recorded periods + 12
  */

@@ -1,5 +1,4 @@
 export { type CentralPath, centralPath, type Ground, stateLimits } from "./central-path.js";
-export { type DrawnStarts, drawnStarts, unknownsDraw } from "./constants/drawn-starts.js";
 export type { Band } from "./ensemble/band.js";
 export { blockStreams } from "./ensemble/block-streams.js";
 export { type EnsembleRun, runEnsemble, type Starts } from "./ensemble/ensemble.js";
@@ -14,6 +13,7 @@ export type { Scenarios } from "./inputs/scenarios.js";
 export { fittedNoise } from "./noise/fitted-noise.js";
 export { type Noise, type NoiseDraw, noiseDraw } from "./noise/noise.js";
 export { ruleNoise } from "./noise/rule-noise.js";
+export { type DrawnStarts, drawnStarts, unknownsDraw } from "./parameters/drawn-starts.js";
 export type { PathDraws } from "./path-draws.js";
 export type { Predictability } from "./predictability.js";
 export type { GroupForecast, ProjectedState } from "./projected-group.js";

@@ -2,10 +2,10 @@
 export interface PathDraws {
   readonly paths: number;
   readonly periods: number;
-  /** Constants drawn, no further error. Empty for a simulation at given constants. */
+  /** Parameters drawn, no further error. Empty for a simulation at given parameters. */
   readonly mean: readonly Float64Array[];
-  /** The same constants, with process errors on the way or a reading's error on top. NaN once a path has ended. */
+  /** The same parameters, with process errors on the way or a reading's error on top. NaN once a path has ended. */
   readonly future: readonly Float64Array[];
-  /** Draws thrown away because a constant left its bounds. */
+  /** Draws thrown away because a parameter left its bounds. */
   readonly discarded: number;
 }

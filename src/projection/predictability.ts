@@ -2,18 +2,18 @@ import { quantile } from "../numeric/index.js";
 import type { CompiledRule } from "../rule/index.js";
 import type { Starts } from "./ensemble/ensemble.js";
 
-/** Whether nearby paths part, by the largest Lyapunov exponent over the constants drawn. */
+/** Whether nearby paths part, by the largest Lyapunov exponent over the parameters drawn. */
 export interface Predictability {
   /** Per period, at the estimates: the rate at which a small error grows. */
-  readonly exponent: number;
-  /** 95% over drawn constants. */
+  readonly lyapunovExponent: number;
+  /** 95% over drawn parameters. */
   readonly lower: number;
   readonly upper: number;
-  /** Share of drawn constants with a positive exponent on a bounded path, and its Monte-Carlo error. */
+  /** Share of drawn parameters with a positive exponent on a bounded path, and its Monte-Carlo error. */
   readonly chaotic: number;
   readonly chaoticError: number;
   /** Periods ahead after which a single path means nothing; undefined where no error grows. */
-  readonly horizon: number | undefined;
+  readonly predictionHorizon: number | undefined;
   /** First state in the long run: where its values lie, 95%, whatever the start; absent unless errors grow. */
   readonly longRun?: { readonly lower: number; readonly median: number; readonly upper: number };
 }
@@ -21,7 +21,7 @@ export interface Predictability {
 /** Periods that are let pass before the exponent is taken, and over which it is taken. */
 const settling = 200;
 const length = 400;
-/** Drawn constants that are looked at first, and how many where one of those comes near to parting. */
+/** Drawn parameters that are looked at first, and how many where one of those comes near to parting. */
 const firstLooks = 40;
 const looks = 200;
 const near = -0.05;
@@ -34,10 +34,10 @@ interface LongRun {
 }
 
 /**
- * Follows the long run of the rule for drawn constants.
+ * Follows the long run of the rule for drawn parameters.
  *
  * @param central - the estimates, as one start.
- * @param firstError - standard deviation of the first state one period ahead, from the constants alone.
+ * @param firstError - standard deviation of the first state one period ahead, from the parameters alone.
  * @see horizon: ln(tolerance / first error) / exponent periods, the tolerance being the standard deviation of the
  *   long run; see Strogatz (1994), Nonlinear Dynamics and Chaos, section 9.3 (from memory).
  */
@@ -57,19 +57,19 @@ export function predictabilityOf(
   const wild = runs.filter(isChaotic);
   const chaotic = wild.length / runs.length;
   const shared = {
-    exponent: own.exponent,
+    lyapunovExponent: own.exponent,
     lower: quantile(exponents, 0.025),
     upper: quantile(exponents, 0.975),
     chaotic,
     chaoticError: Math.sqrt((chaotic * (1 - chaotic)) / runs.length),
   };
-  if (wild.length === 0) return { ...shared, horizon: undefined };
+  if (wild.length === 0) return { ...shared, predictionHorizon: undefined };
   const pooled = Float64Array.from(wild.flatMap((run) => Array.from(run.values))).sort();
   const rates = Float64Array.from(wild, (run) => run.exponent).sort();
   const periods = Math.log(deviationOf(pooled) / firstError) / quantile(rates, 0.5);
   return {
     ...shared,
-    horizon: isChaotic(own) || chaotic >= 0.5 ? Math.max(1, Math.floor(periods)) : undefined,
+    predictionHorizon: isChaotic(own) || chaotic >= 0.5 ? Math.max(1, Math.floor(periods)) : undefined,
     longRun: {
       lower: quantile(pooled, 0.025),
       median: quantile(pooled, 0.5),
@@ -95,8 +95,10 @@ function follower(
   const slopes = new Float64Array(2 * width * unknowns);
   const tangent = new Float64Array(width);
   return (starts, path) => {
-    const shared = starts.constants.length === size;
-    const constants = shared ? starts.constants : starts.constants.subarray(path * size, (path + 1) * size);
+    const shared = starts.parameters.length === size;
+    const parameters = shared
+      ? starts.parameters
+      : starts.parameters.subarray(path * size, (path + 1) * size);
     const own = starts.initial.length === width ? 0 : path * width;
     state.set(starts.initial.subarray(own, own + width));
     tangent.fill(1 / Math.sqrt(width));
@@ -105,7 +107,7 @@ function follower(
     let early = 0;
     let late = 0;
     for (let t = 0; t < settling + length; t++) {
-      compiled.pathWithSensitivities(state, constants, [], 0, 1, table, slopes);
+      compiled.pathWithSensitivities(state, parameters, [], 0, 1, table, slopes);
       const growth = carried(tangent, slopes, width, size);
       state.set(table.subarray(width));
       const extent = Math.abs(state[0]!);

@@ -10,7 +10,7 @@ import type { Predictability } from "./predictability.js";
 export interface ProjectedState {
   readonly state: string;
   readonly unit: string;
-  /** The path at the estimates, or at the given constants, without random change; NaN after it has left its range. */
+  /** The path at the estimates, or at the given parameters, without random change; NaN after it has left its range. */
   readonly central: readonly number[];
   /** The middle of the drawn paths that carry every error. */
   readonly median: readonly number[];
@@ -36,7 +36,7 @@ export interface GroupForecast {
   /** Step index of the last recorded value; of the first value in a simulation. */
   readonly recordEnd: number;
   readonly states: readonly ProjectedState[];
-  readonly draws: PathDraws;
+  readonly ensemble: PathDraws;
   /** First passages of what was watched. */
   readonly passages: readonly Passage[];
   /** Share of paths that had left their range by the end, and its Monte-Carlo error. */

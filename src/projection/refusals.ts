@@ -76,11 +76,11 @@ export function refuseTwoPlans(): ModelError {
 }
 
 export function refuseUndetermined(group: string, names: readonly string[]): ModelError {
-  const who = names.length === 0 ? "The constants" : names.join(" and ");
+  const who = names.length === 0 ? "The parameters" : names.join(" and ");
   return new ModelError(
-    "constants-not-separated",
+    "parameters-not-separated",
     `${who}${group === "" ? "" : ` of "${group}"`} cannot be separated by this record, so no margin can be put on a ` +
-      "projection. Hold one with { fixed }, or use a rule with fewer constants.",
+      "projection. Hold one with { fixed }, or use a rule with fewer parameters.",
     { group, names },
   );
 }
@@ -88,7 +88,7 @@ export function refuseUndetermined(group: string, names: readonly string[]): Mod
 export function refuseNoPath(group: string, rule: string): ModelError {
   return new ModelError(
     "no-finite-path",
-    `"${rule}" leaves the finite range at the fitted constants${group === "" ? "" : ` of "${group}"`}: nothing can be projected.`,
+    `"${rule}" leaves the finite range at the fitted parameters${group === "" ? "" : ` of "${group}"`}: nothing can be projected.`,
     { group, rule },
   );
 }
@@ -96,7 +96,7 @@ export function refuseNoPath(group: string, rule: string): ModelError {
 export function refuseNoDraws(group: string): ModelError {
   return new ModelError(
     "no-draw-in-bounds",
-    `No drawn constants${group === "" ? "" : ` of "${group}"`} lie within their bounds: the bounds contradict the estimates. Widen { bounds } and fit again.`,
+    `No drawn parameters${group === "" ? "" : ` of "${group}"`} lie within their bounds: the bounds contradict the estimates. Widen { bounds } and fit again.`,
     { group },
   );
 }

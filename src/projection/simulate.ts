@@ -1,4 +1,4 @@
-import { constantsBySlot, type InitialValues, initialVector } from "../dynamics/index.js";
+import { type InitialValues, initialVector, parametersBySlot } from "../dynamics/index.js";
 import { randomStream } from "../numeric/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../rule/index.js";
 import { centralPath, type Ground, stateLimits } from "./central-path.js";
@@ -19,8 +19,8 @@ import { rangeWarnings } from "./range-warnings.js";
 
 /** Options of `simulate`. */
 export interface SimulateOptions {
-  /** By constant; those the rule holds fixed may be left out. */
-  readonly constants?: Readonly<Record<string, number>>;
+  /** By parameter; those the rule holds fixed may be left out. */
+  readonly parameters?: Readonly<Record<string, number>>;
   /** By state; those the rule states may be left out. With lags a list, oldest first. */
   readonly initial?: InitialValues;
   readonly periods: number;
@@ -31,7 +31,7 @@ export interface SimulateOptions {
   /** By state: the random change of each period; default what the rule says. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
   /** By state: the error of a reading, reported and not carried on. */
-  readonly reading?: Readonly<Record<string, Noise>>;
+  readonly observationNoise?: Readonly<Record<string, Noise>>;
   /** What a period is called, as in "month"; default "period". */
   readonly period?: string;
   /** What the first period is numbered, as the last recorded month is; default 0. */
@@ -48,11 +48,11 @@ export interface SimulateOptions {
   readonly onProgress?: (done: number, of: number) => void;
 }
 
-/** Paths of a rule at given constants, with bands across them. */
+/** Paths of a rule at given parameters, with bands across them. */
 export interface Simulation {
   readonly kind: "simulation";
   readonly rule: Rule;
-  readonly constants: Readonly<Record<string, number>>;
+  readonly parameters: Readonly<Record<string, number>>;
   readonly options: {
     readonly periods: number;
     readonly paths: number;
@@ -65,7 +65,7 @@ export interface Simulation {
 }
 
 /**
- * Runs a rule from given constants: one path without random change, and many with it, period by period.
+ * Runs a rule from given parameters: one path without random change, and many with it, period by period.
  *
  * Paths run in blocks of 1024, each with its own stream: more periods leave the earlier numbers as they are, more paths
  * the earlier whole blocks, and scenarios meet the same random numbers. Memory holds one value a path and state, so a million paths fit; the
@@ -76,13 +76,13 @@ export interface Simulation {
  *   `future-input-missing` | `noise-not-readable`.
  * @example
  * const rule = recurrence("N[t+1] = R*N");
- * simulate(rule, { constants: { R: 1.1 }, initial: { N: 100 }, periods: 10, noise: { N: { kind: "lognormal", sd: 0.2 } } });
+ * simulate(rule, { parameters: { R: 1.1 }, initial: { N: 100 }, periods: 10, noise: { N: { distribution: "lognormal", sd: 0.2, centre: "mean" } } });
  */
 export function simulate(rule: Rule, options: SimulateOptions): Simulation {
   const { periods, levels = [0.5, 0.8, 0.95], seed = 1 } = options;
-  const constants = constantsBySlot(rule, options.constants);
-  const change = ruleNoise(rule, constants, options.noise);
-  const random = change.some((noise) => noise !== undefined) || options.reading !== undefined;
+  const parameters = parametersBySlot(rule, options.parameters);
+  const change = ruleNoise(rule, parameters, options.noise);
+  const random = change.some((noise) => noise !== undefined) || options.observationNoise !== undefined;
   const paths = options.paths ?? (random ? 4000 : 1);
   checkRun(periods, paths, levels);
   const initial = initialVector(rule, options.initial);
@@ -90,13 +90,13 @@ export function simulate(rule: Rule, options: SimulateOptions): Simulation {
   const settings = { periods, paths, seed, levels, period: options.period ?? "period" };
   const groups = scenariosOf(options).map(({ name, plans }) => {
     const inputs = plannedInputs(rule, plans, { recorded: () => [], rows: 0, last: periods, firstNumber: 0 });
-    const ground = { rule, compiled, constants, initial, inputs, from: 0, periods };
+    const ground = { rule, compiled, parameters, initial, inputs, from: 0, periods };
     return simulated(ground, name, plans, { ...options, ...settings }, change);
   });
   return Object.freeze({
     kind: "simulation",
     rule,
-    constants: Object.freeze(Object.fromEntries(rule.constants.map((name, i) => [name, constants[i]!]))),
+    parameters: Object.freeze(Object.fromEntries(rule.parameters.map((name, i) => [name, parameters[i]!]))),
     options: Object.freeze(settings),
     groups: Object.freeze(groups),
   });
@@ -132,10 +132,10 @@ function simulated(
     inputs: ground.inputs,
     from: 0,
     periods,
-    starts: { paths, size: ground.constants.length, constants: ground.constants, initial: ground.initial },
+    starts: { paths, size: ground.parameters.length, parameters: ground.parameters, initial: ground.initial },
     change: change.map((noise) => noise && noiseDraw(noise)),
     reading: rule.states.map((state) => {
-      const noise = options.reading?.[state];
+      const noise = options.observationNoise?.[state];
       return noise && noiseDraw(noise);
     }),
     limits: stateLimits(rule),
@@ -161,7 +161,7 @@ function simulated(
       bands: states[s]!.bands,
       ...(states[s]!.growth && { growth: states[s]!.growth }),
     })),
-    draws: {
+    ensemble: {
       paths,
       periods,
       mean: [],

@@ -17,7 +17,7 @@ export type {
   Observations,
   ObservedGroup,
   ObservedState,
-  ReplicateSpread,
+  ReplicateVariation,
   StepLength,
 } from "./observations.js";
 export { observations } from "./observe.js";
@@ -29,6 +29,6 @@ export { type FillOptions, filled } from "./tables/filled.js";
 export type { PeriodsOf } from "./tables/placed-series.js";
 export { type ShiftOptions, shifted } from "./tables/shifted.js";
 export type { Summary } from "./tables/summary-of.js";
-export { type RegroupOptions, toPeriods } from "./tables/to-periods.js";
+export { type ToPeriodsOptions, toPeriods } from "./tables/to-periods.js";
 export { type LongerOptions, longer, type WiderOptions, wider } from "./tables/wider.js";
 export { type WindowOptions, windowed } from "./tables/windowed.js";

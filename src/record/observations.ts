@@ -20,7 +20,7 @@ export interface ObservedState {
 }
 
 /** Technical replicates of one state that were averaged: how many a row, and their standard deviation. */
-export interface ReplicateSpread {
+export interface ReplicateVariation {
   readonly count: Int32Array;
   /** Divided by count - 1; NaN where there is a single one. */
   readonly deviation: Float64Array;
@@ -59,7 +59,7 @@ export interface ObservedGroup {
   /** By state name: 0 exact, -1 at or below the value, 1 at or above it; absent when all are exact. */
   readonly censoring?: Readonly<Record<string, Int8Array>>;
   /** By state name, where replicates were averaged. */
-  readonly replicates?: Readonly<Record<string, ReplicateSpread>>;
+  readonly replicates?: Readonly<Record<string, ReplicateVariation>>;
 }
 
 /** A record made ready for rules: groups of values by whole steps, with what was found on the way. */

@@ -1,15 +1,15 @@
 /**
- * A rule as functions over typed arrays. Order everywhere: states, constants and inputs as in the Rule.
+ * A rule as functions over typed arrays. Order everywhere: states, parameters and inputs as in the Rule.
  *
  * `inputs` holds one column an input, indexed by absolute period; `from` is the absolute period of the
  * initial state, so `t` in the rule's text is `from` in the first step. A value that leaves the finite range is
  * written as it comes (NaN or infinite) and the rest of the path follows from it: callers look.
  */
 export interface CompiledRule {
-  /** One period. Reads state [states], constants [constants]; writes next [states] (may be the same array). */
+  /** One period. Reads state [states], parameters [parameters]; writes next [states] (may be the same array). */
   readonly step: (
     state: Float64Array,
-    constants: Float64Array,
+    parameters: Float64Array,
     inputs: readonly Float64Array[],
     t: number,
     next: Float64Array,
@@ -17,7 +17,7 @@ export interface CompiledRule {
   /** A whole path. values [periods + 1, states], the initial state in row 0. */
   readonly path: (
     initial: Float64Array,
-    constants: Float64Array,
+    parameters: Float64Array,
     inputs: readonly Float64Array[],
     from: number,
     periods: number,
@@ -25,12 +25,12 @@ export interface CompiledRule {
   ) => void;
   /**
    * A whole path with exact sensitivities in the same pass.
-   * values [periods + 1, states]; sensitivities [periods + 1, states, constants + states]: d state / d constant
-   * for every constant in order, then d state / d initial state for every state in order.
+   * values [periods + 1, states]; sensitivities [periods + 1, states, parameters + states]: d state / d parameter
+   * for every parameter in order, then d state / d initial state for every state in order.
    */
   readonly pathWithSensitivities: (
     initial: Float64Array,
-    constants: Float64Array,
+    parameters: Float64Array,
     inputs: readonly Float64Array[],
     from: number,
     periods: number,
@@ -39,10 +39,10 @@ export interface CompiledRule {
   ) => void;
   /**
    * One period for the paths first..last-1 of many, in place: they do not wait for each other, so this is several
-   * times faster a path than `step`. present [paths, states]; constants [constants], shared by all.
+   * times faster a path than `step`. present [paths, states]; parameters [parameters], shared by all.
    */
   readonly advance: Advance;
-  /** The same with constants of its own for every path: constants [paths, constants]. */
+  /** The same with parameters of its own for every path: parameters [paths, parameters]. */
   readonly advanceEach: Advance;
   /**
    * Gives the function that gathers a least-squares fit of the whole path, of its logarithms where asked;
@@ -61,7 +61,7 @@ export type Advance = (
   present: Float64Array,
   first: number,
   last: number,
-  constants: Float64Array,
+  parameters: Float64Array,
   inputs: readonly Float64Array[],
   t: number,
   limits: Float64Array,
@@ -69,13 +69,13 @@ export type Advance = (
 
 /**
  * Runs a path and returns the sum of (weight * (observed - state))^2, with its sums by the unknowns, which are the
- * constants in order and then the initial states: J'J, upper triangle row after row, then J'r.
+ * parameters in order and then the initial states: J'J, upper triangle row after row, then J'r.
  *
  * observed and weights [periods + 1, states]; a weight of 0 leaves a value out. sums [m (m + 1)/2 + m].
  */
 export type PathSums = (
   initial: Float64Array,
-  constants: Float64Array,
+  parameters: Float64Array,
   inputs: readonly Float64Array[],
   from: number,
   periods: number,
@@ -86,12 +86,12 @@ export type PathSums = (
 
 /**
  * Takes one step from each of many recorded states and returns the sum of (weight * (observed - next state))^2, with its
- * sums by the constants: J'J, upper triangle row after row, then J'r.
+ * sums by the parameters: J'J, upper triangle row after row, then J'r.
  *
  * periods [pairs]; from, observed and weights [pairs, states]; a weight of 0 leaves a value out. sums [m (m + 1)/2 + m].
  */
 export type StepSums = (
-  constants: Float64Array,
+  parameters: Float64Array,
   inputs: readonly Float64Array[],
   periods: Int32Array,
   from: Float64Array,

@@ -10,9 +10,9 @@ export interface StepEnclosure {
   readonly slope: Interval;
 }
 
-/** Constants and inputs by slot, inputs held at one value. */
+/** Parameters and inputs by slot, inputs held at one value. */
 export interface HeldValues {
-  readonly constants: Float64Array;
+  readonly parameters: Float64Array;
   readonly inputs: Float64Array;
 }
 
@@ -55,11 +55,11 @@ export function encloseStep(rule: Rule, held: HeldValues): (present: Interval) =
     }),
   );
   const width = 1 + rule.memory.length;
-  const constants = Array.from(held.constants, exactly);
+  const parameters = Array.from(held.parameters, exactly);
   const inputs = Array.from(held.inputs, exactly);
   const placeOf = (present: Interval): PlaceOver<Interval> => ({
     state: new Array<Interval>(width).fill(present),
-    constants,
+    parameters,
     input: (slot) => inputs[slot]!,
     t: [Number.NaN, Number.NaN],
   });

@@ -13,7 +13,7 @@ export interface StepFailure extends Span {
 /** Where the step stands: arrays in the rule's order, the state vector with its kept past values. */
 export interface StepPlace {
   readonly state: Float64Array;
-  readonly constants: Float64Array;
+  readonly parameters: Float64Array;
   readonly inputs: readonly Float64Array[];
   readonly t: number;
 }
@@ -113,7 +113,7 @@ function meaningAt(rule: Rule, place: StepPlace, quantities: ReadonlyMap<string,
     if (offset < 0 && kept >= 0) return place.state[rule.states.length + kept]!;
     const state = rule.states.indexOf(name);
     if (state >= 0) return place.state[state]!;
-    return quantities.get(name) ?? place.constants[rule.constants.indexOf(name)]!;
+    return quantities.get(name) ?? place.parameters[rule.parameters.indexOf(name)]!;
   };
 }
 

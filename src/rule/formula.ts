@@ -20,12 +20,12 @@ function formulaOf(rule: Rule, text: string): Formula {
   const next = new Float64Array(1);
   return {
     text,
-    names: rule.constants,
+    names: rule.parameters,
     tex: texExpression(expression, (name) => texName(name, "")),
     at: (values, t = 0) => {
       step(
         next,
-        Float64Array.from(rule.constants, (name) => values[name] ?? Number.NaN),
+        Float64Array.from(rule.parameters, (name) => values[name] ?? Number.NaN),
         [],
         t,
         next,

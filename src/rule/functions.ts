@@ -44,7 +44,7 @@ const byName: ReadonlyMap<string, RuleFunction> = new Map(ruleFunctions.map((one
 /** The function of that name, if the rule language has it. */
 export const ruleFunction = (name: string): RuleFunction | undefined => byName.get(name);
 
-/** Words with a meaning of their own: no state, quantity, input or constant may be called so. */
+/** Words with a meaning of their own: no state, quantity, input or parameter may be called so. */
 export const reservedWords: ReadonlySet<string> = new Set([
   "t",
   "and",

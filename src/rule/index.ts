@@ -11,7 +11,7 @@ export type { Algebra } from "./graph/evaluate-over.js";
 export type { Interval } from "./graph/interval.js";
 export type { Operator } from "./graph/node.js";
 export { inputReach, readsPeriod } from "./input-reach.js";
-export { linearInConstants } from "./linear-in-constants.js";
+export { linearInParameters } from "./linear-in-parameters.js";
 export { quantitiesAt } from "./quantities-at.js";
 export { recurrence } from "./recurrence.js";
 export type { RecurrenceOptions } from "./recurrence-options.js";

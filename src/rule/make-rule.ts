@@ -21,7 +21,7 @@ function copyOf<T>(given: Readonly<Record<string, T>> | undefined): Readonly<Rec
 /** Reads, checks and keeps a rule; `named` is what the catalogue knows of it. */
 export function makeRule(text: string, options: RecurrenceOptions, named?: NamedRule): Rule {
   const normal = text.normalize("NFC").replace(/\r\n?/gu, "\n");
-  const declared: Declared = { constants: options.constants, inputs: options.inputs ?? [] };
+  const declared: Declared = { parameters: options.parameters, inputs: options.inputs ?? [] };
   const definition = defineRule(normal, declared);
   const { checked } = definition;
   checkOptions(checked, options);
@@ -38,10 +38,10 @@ export function makeRule(text: string, options: RecurrenceOptions, named?: Named
     memory: Object.freeze(memoryOf(checked).map((kept) => Object.freeze(kept))),
     quantities: Object.freeze([...checked.quantities]),
     inputs: Object.freeze([...checked.inputs]),
-    constants: Object.freeze([...checked.constants]),
+    parameters: Object.freeze([...checked.parameters]),
     units: copyOf(options.units),
     bounds: copyOf(options.bounds),
-    guesses: copyOf(options.guesses),
+    start: copyOf(options.start),
     fixed: copyOf(options.fixed),
     initial: copyOf(options.initial),
     noise: copyOf(options.noise),

@@ -2,17 +2,17 @@ import type { ProcessNoise } from "./rule.js";
 
 /** What can be said of a rule beside its text. */
 export interface RecurrenceOptions {
-  /** The only names that are constants; any other free name is then refused. Default: every free name is one. */
-  readonly constants?: readonly string[];
+  /** The only names that are parameters; any other free name is then refused. Default: every free name is one. */
+  readonly parameters?: readonly string[];
   /** Names that are recorded by period: columns of the record. Only they may be read at [t+1]. */
   readonly inputs?: readonly string[];
   /** Unit by name. */
   readonly units?: Readonly<Record<string, string>>;
-  /** Lowest and highest admitted value by state or constant; infinite where open. */
+  /** Lowest and highest admitted value by state or parameter; infinite where open. */
   readonly bounds?: Readonly<Record<string, readonly [number, number]>>;
-  /** Where a fit starts, by constant. */
-  readonly guesses?: Readonly<Record<string, number>>;
-  /** Constants that no fit changes. */
+  /** Where a fit starts, by parameter. */
+  readonly start?: Readonly<Record<string, number>>;
+  /** Parameters that no fit changes. */
   readonly fixed?: Readonly<Record<string, number>>;
   /** By state: its first value, its first values oldest first where the rule reads past ones, or "estimated". */
   readonly initial?: Readonly<Record<string, number | readonly number[] | "estimated">>;

@@ -10,11 +10,11 @@ import type { Rule } from "./rule.js";
  *
  * @param text - the lines; `#` begins a comment. Signs: + - * / ^, comparison, and, or, not, and the functions
  *   of `ruleLanguage()`.
- * @param options - what the names are, their units, bounds, guesses and fixed values.
+ * @param options - what the names are, their units, bounds, starts and fixed values.
  * @returns a frozen plain object; `compileRule` runs it.
  * @throws {ModelError} a kebab-case code for each kind of mistake, with `facts.start` and `facts.end`, UTF-16
  *   offsets into `facts.text`, which is the normalised text.
- * @example recurrence("ΔN = r*N*(1 - N/K)").constants; // ["r", "K"]
+ * @example recurrence("ΔN = r*N*(1 - N/K)").parameters; // ["r", "K"]
  */
 export function recurrence(text: string, options: RecurrenceOptions = {}): Rule {
   return makeRule(text, options);

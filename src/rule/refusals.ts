@@ -35,19 +35,19 @@ export function unknownName(
   place: Span,
   name: string,
   known: {
-    readonly constants: readonly string[];
+    readonly parameters: readonly string[];
     readonly others: readonly string[];
     readonly functions: readonly string[];
   },
 ): ModelError {
   const others = known.others.length === 0 ? "" : ` Other names: ${list(known.others)}.`;
-  const hint = suggestion(name, [...known.constants, ...known.others, ...known.functions]);
+  const hint = suggestion(name, [...known.parameters, ...known.others, ...known.functions]);
   return refuse(
     "unknown-name",
     text,
     place,
     `Unknown name "${name}" in the rule.`,
-    `Known constants: ${list(known.constants)}.${others}${hint}`,
+    `Known parameters: ${list(known.parameters)}.${others}${hint}`,
   );
 }
 

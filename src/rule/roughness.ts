@@ -9,7 +9,7 @@ export interface RoughPlace extends Span {
   readonly function: string;
 }
 
-/** Where a step bends or jumps as states or constants move. */
+/** Where a step bends or jumps as states or parameters move. */
 export interface Roughness {
   /** min, max, abs, if: the slope changes at once; derivatives there are one-sided. */
   readonly kinks: readonly RoughPlace[];

@@ -28,7 +28,7 @@ export const keepDefinition = (rule: Rule, definition: RuleDefinition): void => 
 export function ruleDefinition(rule: Rule): RuleDefinition {
   let found = definitions.get(rule);
   if (found === undefined) {
-    found = defineRule(rule.text, { constants: rule.constants, inputs: rule.inputs });
+    found = defineRule(rule.text, { parameters: rule.parameters, inputs: rule.inputs });
     definitions.set(rule, found);
   }
   return found;

@@ -32,7 +32,7 @@ export function ruleLanguage(rule?: Rule): RuleLanguage {
       ...named("state", rule?.states),
       ...named("quantity", rule?.quantities),
       ...named("input", rule?.inputs),
-      ...named("constant", rule?.constants),
+      ...named("parameter", rule?.parameters),
     ],
   };
 }

@@ -1,10 +1,12 @@
 import type { Warning } from "../numeric/index.js";
 import type { NamedRule } from "./catalogue/named-rule.js";
 
-/** Random change added in every period: on the value itself, or as a factor exp(sd z - sd^2/2) of mean 1. */
+/** Random change added in every period: on the value itself (`normal`), or as a factor exp(sd z) (`lognormal`). */
 export interface ProcessNoise {
-  readonly kind: "additive" | "lognormal";
-  /** Standard deviation a period: a number, or the name of a constant of the rule. */
+  readonly distribution: "normal" | "lognormal";
+  /** Of `lognormal`: the factor has median 1 (default), or mean 1. */
+  readonly centre?: "median" | "mean";
+  /** Standard deviation a period: a number, or the name of a parameter of the rule. */
   readonly sd: number | string;
 }
 
@@ -24,15 +26,15 @@ export interface Rule {
   /** Named values inside the period, in event order. */
   readonly quantities: readonly string[];
   readonly inputs: readonly string[];
-  /** Constants in order of first appearance. */
-  readonly constants: readonly string[];
+  /** Parameters in order of first appearance. */
+  readonly parameters: readonly string[];
   /** By name; "" or absent = no unit stated. */
   readonly units: Readonly<Record<string, string>>;
-  /** Lowest and highest admitted value by constant or state; infinite where open. */
+  /** Lowest and highest admitted value by parameter or state; infinite where open. */
   readonly bounds: Readonly<Record<string, readonly [number, number]>>;
-  /** Starting values for a fit, by constant. */
-  readonly guesses: Readonly<Record<string, number>>;
-  /** Constants held at a value in every fit. */
+  /** Starting values for a fit, by parameter. */
+  readonly start: Readonly<Record<string, number>>;
+  /** Parameters held at a value in every fit. */
   readonly fixed: Readonly<Record<string, number>>;
   /**
    * By state, where stated: the value at the first period; a list, oldest first, where the rule reads past

@@ -10,7 +10,7 @@ import { ruleDefinition } from "./rule-definition.js";
 /** Values that a step reads, in some algebra; each role by slot. */
 export interface PlaceOver<T> {
   readonly state: readonly T[];
-  readonly constants: readonly T[];
+  readonly parameters: readonly T[];
   /** Value of an input some periods from t. */
   readonly input: (slot: number, offset: number) => T;
   readonly t: T;
@@ -34,7 +34,7 @@ export function stepOver<T>(rule: Rule, algebra: Algebra<T>): StepOver<T> {
     (place: PlaceOver<T>) =>
     (leaf: Extract<Node, { kind: "leaf" }>): T => {
       if (leaf.role === "state") return place.state[leaf.slot]!;
-      if (leaf.role === "constant") return place.constants[leaf.slot]!;
+      if (leaf.role === "parameter") return place.parameters[leaf.slot]!;
       return leaf.role === "period" ? place.t : place.input(leaf.slot, leaf.offset);
     };
   return {
@@ -55,5 +55,5 @@ export const intervalAlgebra: Algebra<Interval> = {
 /** Whether the next state is a fixed linear function of the present one: no slope reads a state, an input or t. */
 export function isLinearInStates(rule: Rule): boolean {
   const slopes = stepDerivatives(ruleDefinition(rule).graph).byState.flat();
-  return graphOrder(slopes).every((node) => node.kind !== "leaf" || node.role === "constant");
+  return graphOrder(slopes).every((node) => node.kind !== "leaf" || node.role === "parameter");
 }

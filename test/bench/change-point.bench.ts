@@ -1,4 +1,4 @@
-// Held to: over 5,000 records without a break a break is called in 5% of them, within 1 point; a break in the constants
+// Held to: over 5,000 records without a break a break is called in 5% of them, within 1 point; a break in the parameters
 // lies in its interval in 90% of records. PERIODWISE_BENCH_RECORDS sets how many of each of five rules (1,000 for the
 // full count, which takes some minutes).
 import { bench } from "vitest";
@@ -17,7 +17,7 @@ const settings: readonly (readonly [Rule, number, readonly number[], readonly nu
   [recurrence("N[t+1] = R*N"), 10, [1.05], [0.95]],
 ];
 
-/** Steps with lognormal errors of 10%; the constants change from period `turn` on. */
+/** Steps with lognormal errors of 10%; the parameters change from period `turn` on. */
 function stepped(
   rule: Rule,
   start: number,
@@ -42,7 +42,7 @@ const all = { alarms: 0, found: 0, inside: 0 };
 for (const [rule, start, before, after] of settings) {
   const own = { alarms: 0, found: 0, inside: 0 };
   for (let k = 0; k < records; k++) {
-    const options = { spread: "proportional", draws: 199, seed: k } as const;
+    const options = { distribution: "lognormal", resamples: 199, seed: k } as const;
     const quiet = changePoint(rule, series(stepped(rule, start, before, before, k)), options).groups[0]!;
     if (quiet.found) own.alarms++;
     const broken = changePoint(rule, series(stepped(rule, start, before, after, k)), options).groups[0]!;
@@ -67,5 +67,5 @@ console.log(
 const [rule, start, before] = settings[2]!;
 const one = series(stepped(rule, start, before, before, 1));
 bench("change point in one record of 40 readings", () => {
-  changePoint(rule, one, { spread: "proportional" });
+  changePoint(rule, one, { distribution: "lognormal" });
 });

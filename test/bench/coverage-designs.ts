@@ -19,7 +19,7 @@ export interface Design {
   readonly without?: (period: number) => boolean;
   readonly limit?: number;
   readonly replicates?: number;
-  /** The constant that the record cannot determine, where the design is made so. */
+  /** The parameter that the record cannot determine, where the design is made so. */
   readonly undetermined?: string;
 }
 
@@ -30,9 +30,9 @@ const gompertz = recurrence("N[t+1] = exp(a)*N^b");
 const quadratic = recurrence("ΔN = r*N*(1 - N/K)");
 const affine = recurrence("x[t+1] = a + b*x");
 const product = recurrence("N[t+1] = (p*q)*N");
-const trajectory: FitOptions = { errors: "observation", spread: "proportional" };
-const step: FitOptions = { errors: "process", spread: "proportional" };
-const both: FitOptions = { errors: "both", spread: "proportional" };
+const trajectory: FitOptions = { errors: "observation", distribution: "lognormal" };
+const step: FitOptions = { errors: "process", distribution: "lognormal" };
+const both: FitOptions = { errors: "both", distribution: "lognormal" };
 const crowd = { rule: sheltered, truth: { R: 1.5, K: 100 }, initial: 5, options: trajectory };
 const wander = { rule: gompertz, initial: Math.exp(3) };
 
@@ -172,9 +172,9 @@ export const designs: readonly Design[] = [
 /** One record of a design. */
 export function simulated(design: Design, stream: RandomStream): Observations {
   const { rule, options, periods, process = 0, reading = 0, replicates = 1, limit } = design;
-  const log = options.spread === "proportional";
+  const log = options.distribution === "lognormal";
   const step = compileRule(rule).step;
-  const constants = Float64Array.from(rule.constants, (name) => design.truth[name]!);
+  const parameters = Float64Array.from(rule.parameters, (name) => design.truth[name]!);
   const state = Float64Array.of(design.initial);
   const kept: { t: number; value: number; below: boolean }[] = [];
   const moved = (value: number, sd: number): number =>
@@ -183,7 +183,7 @@ export function simulated(design: Design, stream: RandomStream): Observations {
     const value = moved(state[0]!, reading / Math.sqrt(replicates));
     const below = limit !== undefined && value < limit;
     if (!design.without?.(t)) kept.push({ t, value: below ? limit! : value, below });
-    step(state, constants, [], t, state);
+    step(state, parameters, [], t, state);
     if (process > 0) state[0] = moved(state[0]!, process);
   }
   return recordOf(rule.states[0]!, kept, replicates);

@@ -2,9 +2,9 @@ import { type Estimate, fit } from "../../src/estimate/index.js";
 import { quantile, randomStream } from "../../src/numeric/index.js";
 import { type Design, simulated } from "./coverage-designs.js";
 
-/** What the intervals of one constant did over many records of a design. */
+/** What the intervals of one parameter did over many records of a design. */
 export interface Coverage {
-  readonly constant: string;
+  readonly parameter: string;
   /** Share of records whose 95% profile interval holds the truth; an open side holds everything. */
   readonly covered: number;
   /** Median width; infinite where a side is open. */
@@ -13,7 +13,7 @@ export interface Coverage {
   readonly undetermined: number;
 }
 
-/** Fits `records` simulated records of a design; says for every constant how its intervals did. */
+/** Fits `records` simulated records of a design; says for every parameter how its intervals did. */
 export function coverageOf(design: Design, records: number, seed: number): readonly Coverage[] {
   const names = Object.keys(design.truth);
   const tallies = names.map(() => ({ covered: 0, undetermined: 0, widths: new Float64Array(records) }));
@@ -32,7 +32,7 @@ export function coverageOf(design: Design, records: number, seed: number): reado
     });
   }
   return tallies.map(({ covered, undetermined, widths }, i) => ({
-    constant: names[i]!,
+    parameter: names[i]!,
     covered: covered / records,
     width: quantile(widths.sort(), 0.5),
     undetermined: undetermined / records,

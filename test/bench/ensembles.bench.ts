@@ -15,7 +15,7 @@ import { compiledInC } from "./time-in-c.js";
 const paths = 10_000;
 const periods = 1_000;
 const compiled = compileRule(recurrence("x[t+1] = r*x*(1 - x)"));
-const constants = Float64Array.of(1.5);
+const parameters = Float64Array.of(1.5);
 const values = new Float64Array(1_000_001);
 
 function leastMilliseconds(work: () => void, rounds = 10): number {
@@ -39,7 +39,7 @@ function stepsAlone(): void {
   const limits = Float64Array.of(-Number.MAX_VALUE, Number.MAX_VALUE);
   for (let block = 0; block < paths; block += 1024)
     for (let t = 0; t < periods; t++)
-      compiled.advance(present, block, Math.min(paths, block + 1024), constants, [], t, limits);
+      compiled.advance(present, block, Math.min(paths, block + 1024), parameters, [], t, limits);
 }
 
 function projected(sd: number): void {
@@ -50,8 +50,8 @@ function projected(sd: number): void {
     inputs: [],
     from: 0,
     periods,
-    starts: { paths, size: 1, constants, initial: Float64Array.of(0.3) },
-    change: [sd === 0 ? undefined : noiseDraw({ kind: "lognormal", sd })],
+    starts: { paths, size: 1, parameters, initial: Float64Array.of(0.3) },
+    change: [sd === 0 ? undefined : noiseDraw({ distribution: "lognormal", sd, centre: "mean" })],
     reading: [undefined],
     limits: [[Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY]],
     streams: blockStreams(randomStream(1), paths),
@@ -61,7 +61,7 @@ function projected(sd: number): void {
 
 function diagram(): void {
   const rule = recurrence("x[t+1] = r*x*(1 - x)");
-  attractor(rule, { constant: "r", from: 2.8, to: 4, columns: 1000, points: 1000, starts: [0.3] });
+  attractor(rule, { vary: "r", values: { from: 2.8, to: 4, count: 1000 }, periods: 1000, initial: [0.3] });
 }
 
 const program = compiledInC(readFileSync(join(__dirname, "ensembles.c"), "utf8"));

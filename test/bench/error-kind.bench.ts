@@ -20,10 +20,10 @@ const growing: readonly (readonly [Rule, readonly number[]])[] = [
 for (const errors of ["process", "observation"] as const) {
   const stream = randomStream(20260401);
   const all = { right: 0, wrong: 0, records: 0 };
-  for (const [rule, constants] of growing) {
+  for (const [rule, parameters] of growing) {
     const own = { right: 0, wrong: 0 };
     for (let k = 0; k < each; k++) {
-      const kind = adviceOn(rule, drawn(rule, constants, 5, 40, 0.1, errors, stream), k);
+      const kind = adviceOn(rule, drawn(rule, parameters, 5, 40, 0.1, errors, stream), k);
       if (kind === errors) own.right++;
       else if (kind !== "undecided") own.wrong++;
     }
@@ -31,7 +31,7 @@ for (const errors of ["process", "observation"] as const) {
     all.wrong += own.wrong;
     all.records += each;
     console.log(
-      `  ${rule.text} at ${constants.join(", ")}: right ${own.right}, wrong ${own.wrong} of ${each}`,
+      `  ${rule.text} at ${parameters.join(", ")}: right ${own.right}, wrong ${own.wrong} of ${each}`,
     );
   }
   const percent = (count: number): string => `${((100 * count) / all.records).toFixed(1)}%`;
@@ -42,13 +42,13 @@ for (const errors of ["process", "observation"] as const) {
 }
 
 function adviceOn(rule: Rule, values: Float64Array, seed: number): string {
-  const options: FitOptions = { errors: "observation", spread: "proportional", intervals: "none" };
+  const options: FitOptions = { errors: "observation", distribution: "lognormal", intervals: "none" };
   const fitted = fit(rule, series(values), options);
   return errorAdvice(fitted, fitted.groups[0]!, 60, randomStream(seed))?.kind ?? "undecided";
 }
 
-const [rule, constants] = growing[1]!;
-const one = drawn(rule, constants, 5, 40, 0.1, "process", randomStream(1));
+const [rule, parameters] = growing[1]!;
+const one = drawn(rule, parameters, 5, 40, 0.1, "process", randomStream(1));
 bench("advice on the kind of error in one record of 40 readings", () => {
   adviceOn(rule, one, 1);
 });

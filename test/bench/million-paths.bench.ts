@@ -6,10 +6,10 @@ import { recurrence } from "../../src/rule/index.js";
 
 const rule = recurrence("N[t+1] = N*exp(r*(1 - N/K))");
 const asked = {
-  constants: { r: 0.5, K: 100 },
+  parameters: { r: 0.5, K: 100 },
   initial: { N: 50 },
   periods: 100,
-  noise: { N: { kind: "lognormal", sd: 0.2 } },
+  noise: { N: { distribution: "lognormal", sd: 0.2, centre: "mean" } },
   paths: Number(process.env["PERIODWISE_BENCH_PATHS"] ?? 1_000_000),
   watch: [{ value: 60, direction: "falling" }],
 } as const;

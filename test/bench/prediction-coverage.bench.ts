@@ -10,7 +10,7 @@ import { compileRule, type Rule, recurrence } from "../../src/rule/index.js";
 interface Design {
   readonly name: string;
   readonly rule: Rule;
-  readonly constants: readonly number[];
+  readonly parameters: readonly number[];
   readonly first: number;
   readonly count: number;
   readonly sd: number;
@@ -22,7 +22,7 @@ const designs: readonly Design[] = [
   {
     name: "affine, errors in the process",
     rule: recurrence("x[t+1] = a*x + b"),
-    constants: [0.7, 30],
+    parameters: [0.7, 30],
     first: 60,
     count: 30,
     sd: 4,
@@ -31,34 +31,34 @@ const designs: readonly Design[] = [
   {
     name: "growth, proportional errors in the process",
     rule: recurrence("x[t+1] = R*x"),
-    constants: [1.05],
+    parameters: [1.05],
     first: 20,
     count: 20,
     sd: 0.1,
-    options: { errors: "process", spread: "proportional" },
+    options: { errors: "process", distribution: "lognormal" },
   },
   {
     name: "Beverton-Holt, proportional errors of reading",
     rule: recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)", bounded),
-    constants: [1.5, 100],
+    parameters: [1.5, 100],
     first: 5,
     count: 20,
     sd: 0.08,
-    options: { errors: "observation", spread: "proportional" },
+    options: { errors: "observation", distribution: "lognormal" },
   },
   {
     name: "Ricker, proportional errors in the process",
     rule: recurrence("N[t+1] = N*exp(r*(1 - N/K))"),
-    constants: [0.8, 100],
+    parameters: [0.8, 100],
     first: 40,
     count: 30,
     sd: 0.2,
-    options: { errors: "process", spread: "proportional" },
+    options: { errors: "process", distribution: "lognormal" },
   },
   {
-    name: "decay, constant errors of reading",
+    name: "decay, parameter errors of reading",
     rule: recurrence("x[t+1] = a*x"),
-    constants: [0.9],
+    parameters: [0.9],
     first: 100,
     count: 15,
     sd: 3,
@@ -70,12 +70,12 @@ const ahead = 5;
 
 /** A record of a design and what follows it, as it will be read. */
 function drawn(design: Design, seed: number): readonly number[] {
-  const { rule, constants, first, count, sd, options } = design;
+  const { rule, parameters, first, count, sd, options } = design;
   const { step } = compileRule(rule);
   const stream = randomStream(seed);
   const state = Float64Array.of(first);
-  const given = Float64Array.from(constants);
-  const log = options.spread === "proportional";
+  const given = Float64Array.from(parameters);
+  const log = options.distribution === "lognormal";
   const erring = (value: number): number =>
     log ? value * Math.exp(sd * stream.normal()) : value + sd * stream.normal();
   const process = options.errors === "process";

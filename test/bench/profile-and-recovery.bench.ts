@@ -1,4 +1,4 @@
-// Held to, warm: profiles of 3 constants and a recovery check of 200 refits on 40 observations in under 25 ms for a
+// Held to, warm: profiles of 3 parameters and a recovery check of 200 refits on 40 observations in under 25 ms for a
 // trajectory or one-step fit, under 1 s for a state-space fit (its profiles and 200 refits).
 import { bench } from "vitest";
 import { bootstrap, type FitOptions, fit } from "../../src/estimate/index.js";
@@ -31,11 +31,11 @@ function profilesAndRecovery(made: Design, options: FitOptions): () => void {
 
 /** Profiles, and 200 records drawn from the fit and searched anew. */
 function stateSpaceRefits(): void {
-  bootstrap(fit(wandering.rule, wanderingRecord, wandering.options), { draws: 200 });
+  bootstrap(fit(wandering.rule, wanderingRecord, wandering.options), { resamples: 200 });
 }
 
 const trajectory = profilesAndRecovery(design, design.options);
-const oneStep = profilesAndRecovery(design, { errors: "process", spread: "proportional" });
+const oneStep = profilesAndRecovery(design, { errors: "process", distribution: "lognormal" });
 const told: readonly (readonly [string, () => void, number, number])[] = [
   ["trajectory fit", trajectory, 20, 25],
   ["one-step fit", oneStep, 20, 25],

@@ -20,7 +20,7 @@ const crowded = [
   "thetaLogistic",
   ...shaped,
 ];
-/** Name, rule, constants, first value, and the rules of which it is a special case or a limit. */
+/** Name, rule, parameters, first value, and the rules of which it is a special case or a limit. */
 const truths: readonly (readonly [string, Rule, readonly number[], number, readonly string[]])[] = [
   ["geometric", rules.geometric(), [1.08], 10, ["affine", ...crowded]],
   ["affine", rules.affine(), [0.8, 20], 10, []],
@@ -44,12 +44,12 @@ function supportedIn(values: ArrayLike<number>): readonly string[] {
   return verdict.rules;
 }
 
-for (const [name, rule, constants, first, containing] of truths) {
+for (const [name, rule, parameters, first, containing] of truths) {
   const stream = randomStream(20260401);
   const count = { exact: 0, alike: 0, called: 0 };
   for (let k = 0; k < records; k++) {
     const errors = k % 2 === 0 ? "process" : "observation";
-    const supported = supportedIn(drawn(rule, constants, first, 30, 0.1, errors, stream));
+    const supported = supportedIn(drawn(rule, parameters, first, 30, 0.1, errors, stream));
     count.called += supported.length;
     if (supported.includes(name)) count.exact++;
     if (supported.some((each) => each === name || containing.includes(each))) count.alike++;

@@ -12,7 +12,7 @@ export const tablesOfEveryKind: Readonly<Record<string, Table>> = {
   "every column": table({
     title: "Every kind of column",
     columns: [
-      { key: "text", label: "Constant", kind: "text" },
+      { key: "text", label: "Parameter", kind: "text" },
       { key: "integer", label: "Week", kind: "integer" },
       { key: "number", label: "Level", unit: "10^4 cells/mL", kind: "number" },
       { key: "estimate", label: "Estimate", unit: "per h", kind: "estimate", pairedWith: "error" },

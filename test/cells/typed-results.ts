@@ -9,11 +9,11 @@ import {
   leastSquares,
   matrixGrowth,
   observations,
-  path,
-  reaches,
   readRecord,
   recurrence,
   rules,
+  timeToReach,
+  trajectory,
 } from "periodwise";
 
 const counts = observations(
@@ -21,25 +21,25 @@ const counts = observations(
   { period: "hour", step: { every: 1, of: "hour" }, value: "density", unit: "10^4 cells/mL" },
 );
 const rule = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)");
-const constants: readonly string[] = rule.constants;
+const parameters: readonly string[] = rule.parameters;
 // @ts-expect-error
-const constantsAreNoNumber: number = rule.constants;
+const parametersAreNoNumber: number = rule.parameters;
 
-const fitted = fit(rule, counts, { errors: "observation", spread: "proportional" });
+const fitted = fit(rule, counts, { errors: "observation", distribution: "lognormal" });
 const kind: "fit" = fitted.kind;
 // @ts-expect-error
 const fitIsNoText: string = fitted;
 // @ts-expect-error
 fit(rule, counts, { errors: "neither" });
 // @ts-expect-error
-fit(rule, counts, { errors: "process", spred: "constant" });
+fit(rule, counts, { errors: "process", distributon: "normal" });
 
 const rivals = compare([fitted, fitted]);
 // @ts-expect-error
 const comparisonIsNoNumber: number = rivals;
 
 const ahead = forecast(fitted, { periods: 12 });
-const ready = reaches(ahead, { state: "N", value: 60, direction: "rising" });
+const ready = timeToReach(ahead, { state: "N", value: 60, direction: "rising" });
 const sentence: string = ready.sentence;
 // @ts-expect-error
 const sentenceIsNoNumber: number = ready.sentence;
@@ -59,21 +59,19 @@ async function table(): Promise<DataFrame> {
 
 const stages = rules.ages({ ages: 3 });
 const dominant: number = matrixGrowth(stages, {
-  constants: { f1: 0, f2: 4, f3: 3, s1: 0.5, s2: 0.25 },
+  parameters: { f1: 0, f2: 4, f3: 3, s1: 0.5, s2: 0.25 },
 }).dominant;
-const verdict: "stable" | "unstable" | "undetermined" = equilibria(rule, { constants: { R: 2, K: 9 } })
+const verdict: "stable" | "unstable" | "undetermined" = equilibria(rule, { parameters: { R: 2, K: 9 } })
   .points[0]!.verdict;
 // @ts-expect-error: points are a list, not anything
-const levelsAreNoText: string = equilibria(rule, { constants: { R: 2, K: 9 } }).points;
-// @ts-expect-error: constants are a list of names
-const namesAreNoText: string = rules.logistic().constants;
+const levelsAreNoText: string = equilibria(rule, { parameters: { R: 2, K: 9 } }).points;
+// @ts-expect-error: parameters are a list of names
+const namesAreNoText: string = rules.logistic().parameters;
 // @ts-expect-error: a path is asked for in periods
-path(stages, { steps: 3 });
+trajectory(stages, { steps: 3 });
 
 export {
   comparisonIsNoNumber,
-  constants,
-  constantsAreNoNumber,
   dominant,
   estimate,
   estimatesAreNoText,
@@ -81,6 +79,8 @@ export {
   kind,
   levelsAreNoText,
   namesAreNoText,
+  parameters,
+  parametersAreNoNumber,
   sentence,
   sentenceIsNoNumber,
   table,

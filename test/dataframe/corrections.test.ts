@@ -2,9 +2,9 @@ import { mkdtempSync, rmSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { afterAll, beforeAll, expect, test } from "vitest";
-import { correct, decisionsLog, undo } from "../../kernel-helpers/commands/corrections.js";
-import { observations, readRecord, writeRecord } from "../../kernel-helpers/commands/records.js";
 import { columnsOf, sourceOf } from "../../kernel-helpers/dataframe/index.js";
+import { correct, decisionsLog, undo } from "../../kernel-helpers/functions/corrections.js";
+import { observations, readRecord, writeRecord } from "../../kernel-helpers/functions/records.js";
 import { bundleOf } from "../../kernel-helpers/tables/index.js";
 
 let folder = "";

@@ -4,8 +4,13 @@ import { join } from "node:path";
 import type { DataFrame } from "danfojs-node";
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import { differences, observations, readRecord, writeRecord } from "../../kernel-helpers/commands/records.js";
 import { columnsOf, frame, toFrame } from "../../kernel-helpers/dataframe/index.js";
+import {
+  differences,
+  observations,
+  readRecord,
+  writeRecord,
+} from "../../kernel-helpers/functions/records.js";
 import { fit } from "../../src/estimate/index.js";
 import { type ColumnTable, type Observations, tableOf } from "../../src/record/index.js";
 import { recurrence } from "../../src/rule/index.js";

@@ -1,6 +1,6 @@
 import { expect, test } from "vitest";
-import { differences, observations, readRecord } from "../../kernel-helpers/commands/records.js";
 import { sourceOf } from "../../kernel-helpers/dataframe/index.js";
+import { differences, observations, readRecord } from "../../kernel-helpers/functions/records.js";
 import { bundleOf } from "../../kernel-helpers/tables/index.js";
 
 const fixtures = "test/record/fixtures";

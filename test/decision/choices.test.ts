@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { best, sensitivity, tradeoff } from "../../src/decision/index.js";
+import { optimize, sensitivity, tradeoff } from "../../src/decision/index.js";
 import { fit } from "../../src/estimate/index.js";
 import { recurrence } from "../../src/rule/index.js";
 import { cultureRecord } from "./harbour-records.js";
@@ -12,13 +12,13 @@ describe("the largest sustained yield", () => {
     // closed form, twelve digits). Here the catch is taken as a share h of the grown stock, so that N is the stock left to
     // grow. A peak is flat: its height holds to rounding, its place to half the digits.
     const rule = recurrence("catch = h*R*N/(1 + (R - 1)*N/K)\nN[t+1] = R*N/(1 + (R - 1)*N/K) - catch");
-    const found = best(rule, {
-      setting: "h",
-      between: [0.01, 0.49],
-      constants: { h: 0.1, R: 2, K: 1000 },
+    const found = optimize(rule, {
+      vary: "h",
+      range: [0.01, 0.49],
+      parameters: { h: 0.1, R: 2, K: 1000 },
       initial: { N: 400 },
       periods: 600,
-      most: yieldAt,
+      maximize: yieldAt,
     });
     expect(found.achieved).toBeCloseTo(171.572875254, 7);
     const left = (found.achieved * (1 - found.value)) / found.value;
@@ -33,30 +33,30 @@ describe("the largest sustained yield", () => {
     // Source: S 432.8567095902, yield 330.3661247617, harvest rate .4328567096: u = W(e^(1-r)), S = K(1-u)/r (Ricker 1954 with
     // the Lambert function; general-purpose arithmetic).
     const rule = recurrence("catch = h*S*exp(r*(1 - S/K))\nS[t+1] = S*exp(r*(1 - S/K)) - catch");
-    const found = best(rule, {
-      setting: "h",
-      between: [0.05, 0.6],
-      constants: { h: 0.3, r: 1, K: 1000 },
+    const found = optimize(rule, {
+      vary: "h",
+      range: [0.05, 0.6],
+      parameters: { h: 0.3, r: 1, K: 1000 },
       initial: { S: 500 },
       periods: 600,
-      most: yieldAt,
+      maximize: yieldAt,
     });
     expect(found.achieved).toBeCloseTo(330.3661247617, 7);
     expect(found.value).toBeCloseTo(0.4328567096, 6);
   });
 
   test("at an end of the range is said to be there", () => {
-    const found = best(recurrence("x[t+1] = x + c"), {
-      setting: "c",
-      between: [0, 5],
-      constants: { c: 1 },
+    const found = optimize(recurrence("x[t+1] = x + c"), {
+      vary: "c",
+      range: [0, 5],
+      parameters: { c: 1 },
       initial: { x: 0 },
       periods: 4,
-      most: { level: "x", at: 4 },
+      maximize: { level: "x", at: 4 },
     });
     expect(found.value).toBe(5);
     expect(found.sentence).toBe(
-      "The value of x 4 periods ahead is largest, 20, with c at 5, and within 1% of that from 4.95 to 5; that is an end of the range 0 to 5, so a wider range may hold a better one, provided the rule x[t+1] = x + c and its constants hold.",
+      "The value of x 4 periods ahead is largest, 20, with c at 5, and within 1% of that from 4.95 to 5; that is an end of the range 0 to 5, so a wider range may hold a better one, provided the rule x[t+1] = x + c and its parameters hold.",
     );
   });
 });
@@ -66,9 +66,9 @@ test("the elasticities of the time to a density are those of its closed form", (
   // three digits.
   const rule = recurrence("N[t+1] = K*N/(N + (K - N)*exp(-r/2))", {
     bounds: { r: [0, Infinity], K: [0, Infinity] },
-    guesses: { r: 0.5 },
+    start: { r: 0.5 },
   });
-  const fitted = fit(rule, cultureRecord(), { errors: "observation", spread: "proportional" });
+  const fitted = fit(rule, cultureRecord(), { errors: "observation", distribution: "lognormal" });
   const found = sensitivity(fitted, { periods: 10, answer: { time: "N", value: 0.8, direction: "rising" } });
   const elasticity = (name: string): number => found.rows.find((row) => row.name === name)!.elasticity;
   expect(elasticity("K")).toBeCloseTo(-0.248, 3);
@@ -84,12 +84,12 @@ test("the elasticities of the time to a density are those of its closed form", (
 test("a table of choices shows time, level and risk of each setting, with the Monte-Carlo error", () => {
   const rule = recurrence("stock[t+1] = stock + ordered - used", { units: { stock: "coils" } });
   const found = tradeoff(rule, {
-    setting: "ordered",
+    vary: "ordered",
     values: { from: 9, to: 11, count: 3 },
-    constants: { ordered: 10, used: 10 },
+    parameters: { ordered: 10, used: 10 },
     initial: { stock: 20 },
     periods: 30,
-    noise: { stock: { kind: "additive", sd: 3 } },
+    noise: { stock: { distribution: "normal", sd: 3 } },
     answers: {
       "runs out": { risk: "stock", value: 0, direction: "falling" },
       "on average": { average: "stock" },
@@ -119,12 +119,12 @@ test.each([
   // (stated tolerance .004), mean yield of those years to a tenth (half a unit, and 4 Monte-Carlo errors).
   const rule = recurrence(`${line}\nB[t+1] = max(B + r*B*(1 - B/K) - catch, 0)`);
   const found = tradeoff(rule, {
-    setting,
+    vary: setting,
     values: [value],
-    constants: { r: 0.4, K: 1000, [setting]: value },
+    parameters: { r: 0.4, K: 1000, [setting]: value },
     initial: { B: 600 },
     periods: 30,
-    noise: { B: { kind: "lognormal", sd: 0.25 } },
+    noise: { B: { distribution: "lognormal", sd: 0.25, centre: "mean" } },
     paths: 60_000,
     answers: { risk: { risk: "B", value: 200, direction: "falling" }, yield: { average: "catch" } },
   });
@@ -135,11 +135,11 @@ test.each([
 
 test("choices without an objective, or between nothing, are refused", () => {
   const rule = recurrence("x[t+1] = x + c");
-  const given = { constants: { c: 1 }, initial: { x: 0 }, periods: 4 };
-  expect(() => best(rule, { ...given, setting: "c", between: [0, 1] })).toThrow(
-    'Say what is to be best: either { most } or { least }, with one measure, such as most: { total: "yield" }.',
+  const given = { parameters: { c: 1 }, initial: { x: 0 }, periods: 4 };
+  expect(() => optimize(rule, { ...given, vary: "c", range: [0, 1] })).toThrow(
+    'Say what is to be best: either { maximize } or { minimize }, with one measure, such as maximize: { total: "yield" }.',
   );
-  expect(() => tradeoff(rule, { ...given, setting: "c", values: [], answers: {} })).toThrow(
+  expect(() => tradeoff(rule, { ...given, vary: "c", values: [], answers: {} })).toThrow(
     "A table of choices needs at least one setting in { values } and one measure in { answers }.",
   );
   expect(() => sensitivity(rule, { ...given, answer: { level: "y", at: 1 } })).toThrow(

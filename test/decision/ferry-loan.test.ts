@@ -1,7 +1,7 @@
 // The ferry loan of notebooks/debt.ipynb, against a ledger kept in whole cents: interest rounded half up each month (common
 // practice), no binary fraction anywhere.
 import { expect, test } from "vitest";
-import { reaches, solveFor } from "../../src/decision/index.js";
+import { solveFor, timeToReach } from "../../src/decision/index.js";
 import { simulate } from "../../src/projection/index.js";
 import { recurrence } from "../../src/rule/index.js";
 
@@ -31,7 +31,7 @@ const now = {
 } as const;
 
 test("each scenario clears the loan in the month that the ledger in cents does", () => {
-  const found = reaches(
+  const found = timeToReach(
     simulate(ledger, {
       ...now,
       scenarios: {
@@ -64,8 +64,8 @@ test("the payment that clears it by month 120 is the smallest in whole cents tha
   const found = solveFor(ledger, {
     ...now,
     inputs: { rate: 0.048 },
-    unknown: "payment",
-    between: [700, 5000],
+    vary: "payment",
+    range: [700, 5000],
     multiple: 0.01,
     until: { time: "owed", value: 0, direction: "falling", atMost: 120 },
   });

@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { reaches } from "../../src/decision/index.js";
+import { timeToReach } from "../../src/decision/index.js";
 import { fit } from "../../src/estimate/index.js";
 import { forecast, simulate } from "../../src/projection/index.js";
 import { observations, tableOf } from "../../src/record/index.js";
@@ -11,13 +11,13 @@ const sheltered = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)", {
 });
 
 describe("a culture on its way to a density", () => {
-  const fitted = fit(sheltered, cultureRecord(), { errors: "observation", spread: "proportional" });
+  const fitted = fit(sheltered, cultureRecord(), { errors: "observation", distribution: "lognormal" });
   const ahead = forecast(fitted, { periods: 40, paths: 4000, seed: 2 });
 
   test("gets to .80 at 8.145 h, and at the first half hour at 8.5", () => {
     // Source: the same record fitted in R 4.2 (nls); time by the closed form ln(A(K-N0)/(N0(K-A)))/r, interval by the delta
     // method with t(18), printed to a thousandth: half a unit, and what four digits of the estimates leave.
-    const { groups } = reaches(ahead, { value: 0.8, direction: "rising" });
+    const { groups } = timeToReach(ahead, { value: 0.8, direction: "rising" });
     const [answer] = groups;
     expect(answer!.time).toBeCloseTo(8.145, 3);
     expect(answer!.meanPath!.lower).toBeCloseTo(8.055, 3);
@@ -31,7 +31,10 @@ describe("a culture on its way to a density", () => {
 
   test("does not get to 1.8, and says where it levels off", () => {
     // Source: as above: capacity 1.52 (1.41 to 1.65 by its profile); the level at the end of the forecast is within 0.1% of it.
-    const found = reaches(forecast(fitted, { periods: 60, seed: 2 }), { value: 1.8, direction: "rising" });
+    const found = timeToReach(forecast(fitted, { periods: 60, seed: 2 }), {
+      value: 1.8,
+      direction: "rising",
+    });
     expect(found.groups[0]!.time).toBeUndefined();
     expect(found.groups[0]!.tendsTo!.value).toBeCloseTo(1.52, 2);
     expect(found.sentence).toMatch(
@@ -40,8 +43,8 @@ describe("a culture on its way to a density", () => {
   });
 
   test("says so in one sentence", () => {
-    expect(reaches(ahead, { value: 0.8, direction: "rising" }).sentence).toMatch(
-      /^N is already recorded at or past 0\.8, at hour 8\.5; by the rule it reaches 0\.8 at hour 8\.14\d \(95% interval 8\.0\d\d to 8\.2\d\d\); the first period at or past it is hour 8\.5, provided it goes on as in the record of 21 values to hour 10, by the rule N\[t\+1\] = R\*N\/\(1 \+ \(R - 1\)\*N\/K\)\. The margin is that of the fitted constants, not of a further reading's error\.$/,
+    expect(timeToReach(ahead, { value: 0.8, direction: "rising" }).sentence).toMatch(
+      /^N is already recorded at or past 0\.8, at hour 8\.5; by the rule it reaches 0\.8 at hour 8\.14\d \(95% interval 8\.0\d\d to 8\.2\d\d\); the first period at or past it is hour 8\.5, provided it goes on as in the record of 21 values to hour 10, by the rule N\[t\+1\] = R\*N\/\(1 \+ \(R - 1\)\*N\/K\)\. The margin is that of the fitted parameters, not of a further reading's error\.$/,
     );
   });
 });
@@ -49,14 +52,14 @@ describe("a culture on its way to a density", () => {
 describe("a walk in normal steps", () => {
   const periods = 10;
   const found = simulate(recurrence("x[t+1] = x + c"), {
-    constants: { c: 0 },
+    parameters: { c: 0 },
     initial: { x: 0 },
     periods,
-    noise: { x: { kind: "additive", sd: 1 } },
+    noise: { x: { distribution: "normal", sd: 1 } },
     paths: 50_000,
     seed: 8,
   });
-  const passage = reaches(found, { value: -1e-12, direction: "falling" });
+  const passage = timeToReach(found, { value: -1e-12, direction: "falling" });
 
   test("first passes below its start by n with probability 1 - C(2n, n)/4^n", () => {
     // Source: Sparre Andersen (1953), Mathematica Scandinavica 1:263: exact for any symmetric continuous step (from memory).
@@ -74,12 +77,12 @@ describe("a walk in normal steps", () => {
     const again = Array.from(
       { length: 50 },
       (_, seed) =>
-        reaches(
+        timeToReach(
           simulate(recurrence("x[t+1] = x + c"), {
-            constants: { c: 0 },
+            parameters: { c: 0 },
             initial: { x: 0 },
             periods,
-            noise: { x: { kind: "additive", sd: 1 } },
+            noise: { x: { distribution: "normal", sd: 1 } },
             paths: 1000,
             seed: seed + 1,
           }),
@@ -102,29 +105,29 @@ test.each([
   // Source: iteration of N' = N + .5 N (1 - N/1000) - H from 500, first N <= 0 (general-purpose arithmetic); 125 is the largest
   // sustainable yield rK/4 and keeps 500 for ever.
   const rule = recurrence("N[t+1] = N + r*N*(1 - N/K) - H");
-  const found = simulate(rule, { constants: { r: 0.5, K: 1000, H }, initial: { N: 500 }, periods: 100 });
-  expect(reaches(found, { value: 0, direction: "falling" }).groups[0]!.firstPeriod).toBe(year);
+  const found = simulate(rule, { parameters: { r: 0.5, K: 1000, H }, initial: { N: 500 }, periods: 100 });
+  expect(timeToReach(found, { value: 0, direction: "falling" }).groups[0]!.firstPeriod).toBe(year);
 });
 
 test.each([
   ["a catch of 100", "catch = min(B, c)", { c: 100 }, 0.842],
   ["a share h .20", "catch = h*B", { h: 0.2 }, 0.454],
-])("the risk of a stock below 200 in 30 years under %s", (_, line, catchConstants, risk) => {
+])("the risk of a stock below 200 in 30 years under %s", (_, line, catchParameters, risk) => {
   // Source: 200,000 runs in a general-purpose program, printed to a thousandth, stated tolerance .004.
   const rule = recurrence(`${line}\nB[t+1] = max(B + r*B*(1 - B/K) - catch, 0)`);
   const found = simulate(rule, {
-    constants: { r: 0.4, K: 1000, ...catchConstants },
+    parameters: { r: 0.4, K: 1000, ...catchParameters },
     initial: { B: 600 },
     periods: 30,
-    noise: { B: { kind: "lognormal", sd: 0.25 } },
+    noise: { B: { distribution: "lognormal", sd: 0.25, centre: "mean" } },
     paths: 200_000,
     watch: [{ value: 200, direction: "falling" }],
     seed: 77,
   });
-  expect(found.groups[0]!.draws.future).toHaveLength(0);
-  const { never } = reaches(found, { value: 200, direction: "falling" }).groups[0]!;
+  expect(found.groups[0]!.ensemble.future).toHaveLength(0);
+  const { never } = timeToReach(found, { value: 200, direction: "falling" }).groups[0]!;
   expect(Math.abs(1 - never - risk)).toBeLessThan(0.004);
-  expect(() => reaches(found, { value: 210, direction: "falling" })).toThrow(
+  expect(() => timeToReach(found, { value: 210, direction: "falling" })).toThrow(
     'The paths were too many to keep, and B at 210 was not watched. Run it again with watch: [{ state: "B", value: 210, direction: "falling" }].',
   );
 });
@@ -135,8 +138,8 @@ describe("several flasks", () => {
     scatter.map((_, t) => 5 * R ** t * Math.exp(scatter[(t + shift) % 10]!));
   const counts = flaskRecord({ A: flask(1.3, 0), B: flask(1.25, 3), C: flask(1.35, 6) });
   const growth = recurrence("N[t+1] = R*N");
-  const fitted = fit(growth, counts, { errors: "observation", spread: "proportional" });
-  const found = reaches(forecast(fitted, { periods: 12, paths: 500 }), {
+  const fitted = fit(growth, counts, { errors: "observation", distribution: "lognormal" });
+  const found = timeToReach(forecast(fitted, { periods: 12, paths: 500 }), {
     value: 120,
     direction: "rising",
     newUnit: true,
@@ -170,7 +173,7 @@ test("between two periods a geometric, an affine and a Beverton-Holt path lie on
   ] as const;
   for (const [text, x, value] of cases) {
     const found = simulate(recurrence(text), { initial: { x }, periods: 8 });
-    expect(reaches(found, { value, direction: "rising" }).groups[0]!.time).toBeCloseTo(3.37, 9);
+    expect(timeToReach(found, { value, direction: "rising" }).groups[0]!.time).toBeCloseTo(3.37, 9);
   }
 });
 
@@ -188,7 +191,7 @@ describe("a loan recorded by month ends", () => {
 
   test("is answered for in dates", () => {
     expect(ahead.groups[0]!.labels!.slice(0, 3)).toEqual(["2027-01-31", "2027-02-28", "2027-03-31"]);
-    const found = reaches(ahead, { value: 3000, direction: "falling" });
+    const found = timeToReach(ahead, { value: 3000, direction: "falling" });
     expect(found.groups[0]!.words.time).toBe("between 2027-02-28 and 2027-03-31");
     expect(found.sentence).toMatch(
       /^The value of owed reaches 3000 crowns between 2027-02-28 and 2027-03-31 \(95% interval 2027-02-28 to 2027-03-31\); the first period at or past it is 2027-03-31, provided it goes on as in the record of 6 values to 2027-01-31, by the rule /,
@@ -196,7 +199,7 @@ describe("a loan recorded by month ends", () => {
   });
 
   test("that begins past the value asked for gets no date", () => {
-    const found = reaches(ahead, { value: 7000, direction: "falling" });
+    const found = timeToReach(ahead, { value: 7000, direction: "falling" });
     expect(found.groups[0]!.time).toBeUndefined();
     expect(found.groups[0]!.beginsPast).toBe(true);
     expect(found.sentence).toMatch(
@@ -205,7 +208,7 @@ describe("a loan recorded by month ends", () => {
   });
 
   test("that passed the value in the record is said to have", () => {
-    expect(reaches(ahead, { value: 5000, direction: "falling" }).sentence).toMatch(
+    expect(timeToReach(ahead, { value: 5000, direction: "falling" }).sentence).toMatch(
       /^The value of owed is already recorded at or past 5000 crowns, at 2026-11-30/,
     );
   });
@@ -240,13 +243,13 @@ test("dates go by days and weeks, and by months that keep their day", () => {
 
 test("questions that cannot be asked are refused", () => {
   const found = simulate(recurrence("x[t+1] = x + 1"), { initial: { x: 0 }, periods: 3 });
-  expect(() => reaches(found, { state: "y", value: 1, direction: "rising" })).toThrow(
+  expect(() => timeToReach(found, { state: "y", value: 1, direction: "rising" })).toThrow(
     'The forecast has no state "y". It has: x.',
   );
-  expect(() => reaches(found, { value: Number.NaN, direction: "rising" })).toThrow(
+  expect(() => timeToReach(found, { value: Number.NaN, direction: "rising" })).toThrow(
     "The value to reach must be a finite number; NaN was given.",
   );
-  expect(() => reaches(found, { value: 1, direction: "rising", level: 95 })).toThrow(
+  expect(() => timeToReach(found, { value: 1, direction: "rising", level: 95 })).toThrow(
     "An interval has a level between 0 and 1, such as 0.95; 95 was given.",
   );
 });

@@ -1,25 +1,25 @@
 import { describe, expect, test } from "vitest";
 import {
-  best,
   fit,
   forecast,
   nextReading,
   observations,
-  reaches,
+  optimize,
   recurrence,
   sensitivity,
   simulate,
   solveFor,
+  timeToReach,
   tradeoff,
 } from "../../kernel-helpers/index.js";
 import { bundleOf } from "../../kernel-helpers/tables/index.js";
 
 const stock = recurrence("stock[t+1] = stock + ordered - used", { units: { stock: "coils" } });
 const given = {
-  constants: { ordered: 10, used: 10 },
+  parameters: { ordered: 10, used: 10 },
   initial: { stock: 20 },
   periods: 12,
-  noise: { stock: { kind: "additive", sd: 3 } },
+  noise: { stock: { distribution: "normal", sd: 3 } },
   paths: 400,
   period: "week",
 } as const;
@@ -32,13 +32,16 @@ const flasks = observations(
   },
   { period: "hour", step: { every: 1, of: "hour" }, by: "flask", value: "N", unit: "10^4 cells/mL" },
 );
-const grown = fit(recurrence("N[t+1] = R*N"), flasks, { errors: "observation", spread: "proportional" });
+const grown = fit(recurrence("N[t+1] = R*N"), flasks, { errors: "observation", distribution: "lognormal" });
 
 const shown = async (value: unknown): Promise<string> => `${(await bundleOf(value))!["text/plain"]}`;
 
 describe("what is shown of a decision has its numbers and its sentence", () => {
   test("reaches: every group, and the sentence", async () => {
-    const found = reaches(forecast(grown, { periods: 8, paths: 200 }), { value: 120, direction: "rising" });
+    const found = timeToReach(forecast(grown, { periods: 8, paths: 200 }), {
+      value: 120,
+      direction: "rising",
+    });
     const text = await shown(found);
     expect(text).toContain("When N reaches 120 ×10⁴ cells/mL by N[t+1] = R*N");
     expect(text).toContain(found.sentence.slice(0, 60));
@@ -64,20 +67,20 @@ describe("what is shown of a decision has its numbers and its sentence", () => {
       () =>
         solveFor(stock, {
           ...given,
-          unknown: "stock[0]",
-          between: [5, 80],
+          vary: "stock[0]",
+          range: [5, 80],
           multiple: 1,
           until: { ...out, atMost: 0.1 },
         }),
     ],
     [
       "best",
-      () => best(stock, { ...given, setting: "ordered", between: [5, 15], least: { highest: "stock" } }),
+      () => optimize(stock, { ...given, vary: "ordered", range: [5, 15], minimize: { highest: "stock" } }),
     ],
     ["sensitivity", () => sensitivity(stock, { ...given, answer: { level: "stock", at: 5 } })],
     [
       "nextReading",
-      () => nextReading(grown, { periods: 4, group: "A", draws: 100, answer: { constant: "R" } }),
+      () => nextReading(grown, { periods: 4, group: "A", paths: 100, answer: { parameter: "R" } }),
     ],
   ])("%s: the sentence", async (_, ask) => {
     const found = ask();
@@ -87,7 +90,7 @@ describe("what is shown of a decision has its numbers and its sentence", () => {
   test("tradeoff: each risk with its Monte-Carlo error", async () => {
     const found = tradeoff(stock, {
       ...given,
-      setting: "ordered",
+      vary: "ordered",
       values: [9, 10, 11],
       answers: { "runs out": out },
     });

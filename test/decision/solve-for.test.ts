@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { reaches, solveFor } from "../../src/decision/index.js";
+import { solveFor, timeToReach } from "../../src/decision/index.js";
 import { fit } from "../../src/estimate/index.js";
 import { normalQuantile } from "../../src/numeric/index.js";
 import { forecast } from "../../src/projection/index.js";
@@ -10,7 +10,7 @@ const loan = recurrence(
   "interest = i*owed\npaid = min(payment[t+1], owed + interest)\nowed[t+1] = owed + interest - paid",
   { inputs: ["payment"], units: { payment: "EUR", owed: "EUR" } },
 );
-const ferry = { constants: { i: 0.0035 }, initial: { owed: 240_000 }, periods: 320 };
+const ferry = { parameters: { i: 0.0035 }, initial: { owed: 240_000 }, periods: 320 };
 
 describe("a loan", () => {
   // Source: p = i B0/(1 - (1+i)^-n), the level-payment formula of any text on the theory of interest; 300 months at .35% a month.
@@ -19,8 +19,8 @@ describe("a loan", () => {
   test("is cleared in a month by the level payment, and by any larger one", () => {
     const found = solveFor(loan, {
       ...ferry,
-      unknown: "payment",
-      between: [900, 3000],
+      vary: "payment",
+      range: [900, 3000],
       until: { level: "owed", at: 300, atMost: 0 },
     });
     expect(found.solutions).toHaveLength(1);
@@ -31,23 +31,23 @@ describe("a loan", () => {
   test("takes a payment in whole cents that is enough, not one short", () => {
     const found = solveFor(loan, {
       ...ferry,
-      unknown: "payment",
-      between: [900, 3000],
+      vary: "payment",
+      range: [900, 3000],
       multiple: 0.01,
       until: { time: "owed", value: 0, direction: "falling", atMost: 300 },
     });
     expect(found.solutions[0]!.value).toBe(Math.ceil(level * 100) / 100);
     expect(found.solutions[0]!.achieved).toBe(300);
     expect(found.sentence).toBe(
-      "With payment at or above 1293.47 EUR, owed falls to 0 EUR at period 300, provided payment goes as planned and the rule and its constants hold.",
+      "With payment at or above 1293.47 EUR, owed falls to 0 EUR at period 300, provided payment goes as planned and the rule and its parameters hold.",
     );
   });
 
   test("is not cleared by a payment below the interest, and the nearest miss is said", () => {
     const found = solveFor(loan, {
       ...ferry,
-      unknown: "payment",
-      between: [100, 800],
+      vary: "payment",
+      range: [100, 800],
       until: { level: "owed", at: 300, is: 0 },
     });
     expect(found.solutions).toEqual([]);
@@ -62,11 +62,11 @@ test("two starts give the same level a period on, and both are told", () => {
   const rule = recurrence("N[t+1] = N + r*N*(1 - N/K)");
   const root = Math.sqrt(1.5 ** 2 - (4 * 550) / 2000);
   const found = solveFor(rule, {
-    constants: { r: 0.5, K: 1000 },
+    parameters: { r: 0.5, K: 1000 },
     initial: { N: 500 },
     periods: 1,
-    unknown: "N[0]",
-    between: [0, 3000],
+    vary: "N[0]",
+    range: [0, 3000],
     until: { level: "N", at: 1, is: 550 },
   });
   expect(found.solutions.map((each) => each.value)).toHaveLength(2);
@@ -80,13 +80,13 @@ test("the stock that keeps the risk of running out at 2% is the quantile of one 
   // Tolerance: 4.5 Monte-Carlo errors of a 2% quantile with 40,000 draws, .16, and the whole piece it is rounded to.
   const rule = recurrence("stock[t+1] = stock - demand", { units: { stock: "pieces" } });
   const found = solveFor(rule, {
-    constants: { demand: 40 },
+    parameters: { demand: 40 },
     initial: { stock: 60 },
     periods: 1,
-    noise: { stock: { kind: "additive", sd: 5 } },
+    noise: { stock: { distribution: "normal", sd: 5 } },
     paths: 40_000,
-    unknown: "stock[0]",
-    between: [20, 100],
+    vary: "stock[0]",
+    range: [20, 100],
     multiple: 1,
     until: { risk: "stock", value: 0, direction: "falling", atMost: 0.02 },
   });
@@ -95,7 +95,7 @@ test("the stock that keeps the risk of running out at 2% is the quantile of one 
   expect(Math.abs(found.solutions[0]!.exact - exact)).toBeLessThan(0.16 + 0.02);
   expect(found.solutions[0]!.achieved).toBeLessThanOrEqual(0.02);
   expect(found.sentence).toMatch(
-    /^With stock\[0\] at or above 51 pieces, the risk that stock falls to 0 pieces is 1\.\d+% \(Monte-Carlo error 0\.0\d%\), provided the rule stock\[t\+1\] = stock - demand and its constants hold\.$/,
+    /^With stock\[0\] at or above 51 pieces, the risk that stock falls to 0 pieces is 1\.\d+% \(Monte-Carlo error 0\.0\d%\), provided the rule stock\[t\+1\] = stock - demand and its parameters hold\.$/,
   );
 });
 
@@ -103,16 +103,16 @@ test("a fit's answer has an interval, and solving it back gives the target", () 
   const rule = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)", {
     bounds: { R: [1, Infinity], K: [0, Infinity] },
   });
-  const fitted = fit(rule, cultureRecord(), { errors: "observation", spread: "proportional" });
+  const fitted = fit(rule, cultureRecord(), { errors: "observation", distribution: "lognormal" });
   const found = solveFor(fitted, {
     periods: 20,
-    unknown: "N[0]",
+    vary: "N[0]",
     until: { time: "N", value: 0.8, direction: "rising", is: 6 },
     seed: 4,
   });
   const [solution] = found.solutions;
   // Source: closed form N0 = K A/(A + (K - A) R^t) at the fit's estimates, t = 12 half hours.
-  const [R, K] = ["R", "K"].map((name) => fitted.groups[0]!.constants[name]!) as [number, number];
+  const [R, K] = ["R", "K"].map((name) => fitted.groups[0]!.parameters[name]!) as [number, number];
   expect(solution!.value).toBeCloseTo((K * 0.8) / (0.8 + (K - 0.8) * R ** 12), 9);
   expect(solution!.margin!.lower!).toBeLessThan(solution!.value);
   expect(solution!.margin!.upper!).toBeGreaterThan(solution!.value);
@@ -120,7 +120,7 @@ test("a fit's answer has an interval, and solving it back gives the target", () 
     /^With N\[0\] at 0\.0\d+ \(95% interval 0\.0\d+ to 0\.0\d+\), N rises to 0\.8 at hour 6, provided it goes on as in the record of 21 values to hour 10, by the rule N\[t\+1\] = R\*N\/\(1 \+ \(R - 1\)\*N\/K\)\.$/,
   );
   expect(
-    reaches(forecast(fitted, { periods: 20 }), { value: 0.8, direction: "rising" }).groups[0]!.time,
+    timeToReach(forecast(fitted, { periods: 20 }), { value: 0.8, direction: "rising" }).groups[0]!.time,
   ).toBeGreaterThan(6);
 });
 
@@ -128,15 +128,15 @@ test("what cannot be solved is refused in a whole sentence", () => {
   const ask = (options: object) => () =>
     solveFor(loan, {
       ...ferry,
-      unknown: "payment",
-      between: [900, 3000],
+      vary: "payment",
+      range: [900, 3000],
       until: { level: "owed", at: 300, is: 0 },
       ...options,
     } as never);
-  expect(ask({ unknown: "paymant" })).toThrow(
+  expect(ask({ vary: "paymant" })).toThrow(
     'Nothing called "paymant" can be set. There are: i, owed[0], payment. Did you mean "payment"?',
   );
-  expect(ask({ between: [3000, 900] })).toThrow(
+  expect(ask({ range: [3000, 900] })).toThrow(
     "payment cannot be sought between 3000 and 900: the first must be the smaller one.",
   );
   expect(ask({ until: { level: "owed", at: 400, is: 0 } })).toThrow(
@@ -146,16 +146,16 @@ test("what cannot be solved is refused in a whole sentence", () => {
     "The target has no value. Say { is }, { atMost } or { atLeast } with a finite number.",
   );
   expect(ask({ until: { risk: "owed", value: 0, direction: "falling", atMost: 0.1 } })).toThrow(
-    'The risk of owed needs a rule with random change. Give it: noise: { owed: { kind: "additive", sd: 1 } }, or ask for a time instead.',
+    'The risk of owed needs a rule with random change. Give it: noise: { owed: { distribution: "normal", sd: 1 } }, or ask for a time instead.',
   );
   const idle = recurrence("x[t+1] = x + 0*a", { bounds: { a: [0, 5] } });
   const solve = (between: readonly [number, number] | undefined) => () =>
     solveFor(idle, {
-      constants: { a: 0 },
+      parameters: { a: 0 },
       initial: { x: 1 },
       periods: 3,
-      unknown: "a",
-      ...(between && { between }),
+      vary: "a",
+      ...(between && { range: between }),
       until: { level: "x", at: 3, is: 2 },
     });
   expect(solve(undefined)).toThrow(

@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { reaches, type SolveOptions, solveFor, tradeoff } from "../../src/decision/index.js";
+import { type SolveOptions, solveFor, timeToReach, tradeoff } from "../../src/decision/index.js";
 import { fit } from "../../src/estimate/index.js";
 import { forecast } from "../../src/projection/index.js";
 import { observations, tableOf } from "../../src/record/index.js";
@@ -13,10 +13,10 @@ const ask = (until: SolveOptions["until"], more: Partial<SolveOptions> = {}) =>
   solveFor(store, {
     initial: { stock: 488 },
     periods: 10,
-    noise: { stock: { kind: "additive", sd: 0.5 } },
+    noise: { stock: { distribution: "normal", sd: 0.5 } },
     paths: 400,
-    unknown: "issued",
-    between: [5, 10],
+    vary: "issued",
+    range: [5, 10],
     until,
     ...more,
   });
@@ -61,14 +61,16 @@ test("a limit is rounded to the side that meets the target", () => {
   // 488 - 4 issued = 3.8 at 121.05, which to four digits would be 121.1 or 121.0.
   const until = { level: "stock", at: 4 } as const;
   const between = [50, 200] as const;
-  expect(ask({ ...until, atLeast: 3.8 }, { between }).sentence).toContain("issued at or below 121 t,");
-  expect(ask({ ...until, atMost: 3.8 }, { between }).sentence).toContain("issued at or above 121.1 t,");
-  expect(ask({ ...until, atLeast: 88 }, { between }).sentence).toContain("issued at or below 100 t,");
+  expect(ask({ ...until, atLeast: 3.8 }, { range: between }).sentence).toContain("issued at or below 121 t,");
+  expect(ask({ ...until, atMost: 3.8 }, { range: between }).sentence).toContain(
+    "issued at or above 121.1 t,",
+  );
+  expect(ask({ ...until, atLeast: 88 }, { range: between }).sentence).toContain("issued at or below 100 t,");
 });
 
 test("a time that is not to come too soon is said by its limit", () => {
   const until = { time: "stock", value: 244, direction: "falling", atLeast: 8 } as const;
-  expect(ask(until, { between: [5, 60] }).sentence).toContain("stock falls to 244 t not before period 8,");
+  expect(ask(until, { range: [5, 60] }).sentence).toContain("stock falls to 244 t not before period 8,");
 });
 
 test("an answer read from below zero, where no record was, says so", () => {
@@ -86,10 +88,10 @@ test("an answer read from below zero, where no record was, says so", () => {
   const scenarios = { usual: { landed: 17 }, high: { landed: 100 } };
   const ahead = forecast(fitted, { periods: 6, scenarios, paths: 200 });
   const warning = /By year 15 the rule gives index = -\d+(\.\d)? under "high"/;
-  expect(reaches(ahead, { value: 500, direction: "rising" }).sentence).toMatch(warning);
-  expect(reaches(ahead, { value: 300, direction: "falling" }).sentence).not.toMatch(warning);
+  expect(timeToReach(ahead, { value: 500, direction: "rising" }).sentence).toMatch(warning);
+  expect(timeToReach(ahead, { value: 300, direction: "falling" }).sentence).not.toMatch(warning);
   const compared = tradeoff(fitted, {
-    setting: "landed",
+    vary: "landed",
     values: [17, 100],
     periods: 6,
     answers: { index: { level: "index", at: 6 } },
@@ -97,15 +99,15 @@ test("an answer read from below zero, where no record was, says so", () => {
   });
   expect(compared.sentence).toMatch(/By year 15 the rule gives index = -\d+(\.\d)? under "landed 100": no/);
   const solved = solveFor(fitted, {
-    unknown: "landed",
-    between: [10, 200],
+    vary: "landed",
+    range: [10, 200],
     periods: 6,
     until: { level: "index", at: 6, is: -50 },
   });
   expect(solved.sentence).toContain("By year 15 the rule gives index = -50 under");
   const kept = solveFor(fitted, {
-    unknown: "landed",
-    between: [10, 200],
+    vary: "landed",
+    range: [10, 200],
     periods: 6,
     until: { level: "index", at: 6, is: 0 },
   });

@@ -6,7 +6,7 @@ const { recurrence, rules } = helpers;
 const map = recurrence("x[t+1] = r*x*(1 - x)");
 const matrix = rules.ages({ ages: 3 });
 const loan = recurrence("interest = i*owed\nΔowed = interest - p", { units: { owed: "EUR" } });
-const at = { constants: { r: 3.2 }, initial: { x: 0.3 } };
+const at = { parameters: { r: 3.2 }, initial: { x: 0.3 } };
 
 /** One of each, and a text that its display must hold. */
 const shown: readonly (readonly [string, unknown, RegExp])[] = [
@@ -14,38 +14,42 @@ const shown: readonly (readonly [string, unknown, RegExp])[] = [
   ["a named rule", rules.bevertonHolt(), /Beverton and Holt \(1957\)/u],
   [
     "a path",
-    helpers.path(loan, { constants: { i: 0.1, p: 20 }, initial: { owed: 100 }, periods: 3 }),
+    helpers.trajectory(loan, { parameters: { i: 0.1, p: 20 }, initial: { owed: 100 }, periods: 3 }),
     /interest/u,
   ],
   [
     "an exact path",
-    helpers.exactPath(recurrence("x[t+1] = x/3"), { initial: { x: 1 }, periods: 2 }),
+    helpers.exactTrajectory(recurrence("x[t+1] = x/3"), { initial: { x: 1 }, periods: 2 }),
     /1\/9/u,
   ],
   ["a closed form", helpers.closedForm(recurrence("x[t+1] = 2*x"), { initial: { x: 3 } }), /3\*2\^t/u],
-  ["equilibria", helpers.equilibria(map, { constants: { r: 2.5 }, within: [0, 1] }), /0\.6/u],
+  ["equilibria", helpers.equilibria(map, { parameters: { r: 2.5 }, range: [0, 1] }), /0\.6/u],
   [
     "cycles",
-    helpers.cycles(map, { constants: { r: 3.2 }, period: 2, within: [0, 1] }),
+    helpers.cycles(map, { parameters: { r: 3.2 }, period: 2, range: [0, 1] }),
     /0\.5130445, 0\.7994555/u,
   ],
-  ["bifurcations", helpers.bifurcations(map, { constant: "r", from: 2.9, to: 3.1, start: 0.3 }), /flip/u],
-  ["an exponent", helpers.exponent(map, { ...at, periods: 3000 }), /-0\.916/u],
-  ["a horizon", helpers.horizon(map, { ...at, error: 0.01, tolerance: 0.1, periods: 3000 }), /no end/u],
+  ["bifurcations", helpers.bifurcations(map, { vary: "r", range: [2.9, 3.1], initial: 0.3 }), /flip/u],
+  ["an exponent", helpers.lyapunovExponent(map, { ...at, periods: 3000 }), /-0\.916/u],
+  [
+    "a horizon",
+    helpers.predictionHorizon(map, { ...at, error: 0.01, tolerance: 0.1, periods: 3000 }),
+    /no end/u,
+  ],
   [
     "an attractor",
-    helpers.attractor(map, { constant: "r", from: 3, to: 4, columns: 5, points: 4, starts: [0.3] }),
+    helpers.attractor(map, { vary: "r", values: { from: 3, to: 4, count: 5 }, periods: 4, initial: [0.3] }),
     /Long-run values of x/u,
   ],
   ["a cobweb", helpers.cobweb(map, at), /Next value against present value/u],
   [
     "basins",
-    helpers.basins(rules.allee(), { constants: { r: 0.2, K: 100, A: 20 }, within: [0, 110], starts: 40 }),
+    helpers.basins(rules.allee(), { parameters: { r: 0.2, K: 100, A: 20 }, range: [0, 110], count: 40 }),
     /Borders: 20/u,
   ],
   [
     "a matrix",
-    helpers.matrixGrowth(matrix, { constants: { f1: 0, f2: 4, f3: 3, s1: 0.5, s2: 0.25 } }),
+    helpers.matrixGrowth(matrix, { parameters: { f1: 0, f2: 4, f3: 3, s1: 0.5, s2: 0.25 } }),
     /1\.5 a period/u,
   ],
 ];

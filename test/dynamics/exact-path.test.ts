@@ -1,5 +1,5 @@
 import { expect, test } from "vitest";
-import { exactPath } from "../../src/dynamics/index.js";
+import { exactTrajectory } from "../../src/dynamics/index.js";
 import { recurrence, rules } from "../../src/rule/index.js";
 
 const fibonacci = recurrence("F[t+1] = F + F[t-1]");
@@ -16,7 +16,7 @@ function doubling(n: number): readonly [bigint, bigint] {
 
 test("Fibonacci numbers are exact to F(1000)", () => {
   // The first value is F(1), the one before it F(0).
-  const { values } = exactPath(fibonacci, { initial: { F: [0, 1] }, periods: 999 });
+  const { values } = exactTrajectory(fibonacci, { initial: { F: [0, 1] }, periods: 999 });
   expect(values["F"]![29]).toBe("832040");
   expect(values["F"]![49]).toBe("12586269025");
   expect(values["F"]![77]).toBe("8944394323791464");
@@ -28,8 +28,8 @@ test("Fibonacci numbers are exact to F(1000)", () => {
 
 // Source: closed form x0 a^t + b (1 - a^t)/(1 - a) worked out in whole numbers over 3^t.
 test("forty terms of an affine rule are exact fractions", () => {
-  const { values } = exactPath(rules.affine(), {
-    constants: { a: "2/3", b: "1/7" },
+  const { values } = exactTrajectory(rules.affine(), {
+    parameters: { a: "2/3", b: "1/7" },
     initial: { x: 5 },
     periods: 40,
   });
@@ -51,13 +51,13 @@ test("forty terms of an affine rule are exact fractions", () => {
 // Source: common practice, no source: x10 of 4x(1 - x) from 1/10 has a denominator of 716 digits.
 test("the digits of the quadratic map double with every step", () => {
   const rule = recurrence("x[t+1] = 4*x*(1 - x)");
-  const { values } = exactPath(rule, { initial: { x: 0.1 }, periods: 10 });
+  const { values } = exactTrajectory(rule, { initial: { x: 0.1 }, periods: 10 });
   expect(values["x"]![10]!.split("/")[1]).toHaveLength(716);
 });
 
 test("decimals are read as they print, and computer numbers nearest to fractions are given", () => {
-  const { values, numbers } = exactPath(rules.geometric(), {
-    constants: { R: 0.1 },
+  const { values, numbers } = exactTrajectory(rules.geometric(), {
+    parameters: { R: 0.1 },
     initial: { x: "1/3" },
     periods: 2,
   });
@@ -67,7 +67,7 @@ test("decimals are read as they print, and computer numbers nearest to fractions
 
 test("functions without exact values are refused", () => {
   expect(() =>
-    exactPath(rules.ricker(), { constants: { r: 1, K: 10 }, initial: { N: 1 }, periods: 1 }),
+    exactTrajectory(rules.ricker(), { parameters: { r: 1, K: 10 }, initial: { N: 1 }, periods: 1 }),
   ).toThrowErrorMatchingInlineSnapshot(
     `[ModelError: The rule needs the function exp, which has no exact fraction. Use path instead, which works in computer numbers.]`,
   );
@@ -75,7 +75,7 @@ test("functions without exact values are refused", () => {
 
 test("a path whose digits grow without end is refused, not run", () => {
   const rule = recurrence("x[t+1] = 4*x*(1 - x)");
-  expect(() => exactPath(rule, { initial: { x: 0.1 }, periods: 100 })).toThrow(
+  expect(() => exactTrajectory(rule, { initial: { x: 0.1 }, periods: 100 })).toThrow(
     expect.objectContaining({ code: "too-many-digits" }),
   );
 });

@@ -6,9 +6,9 @@ import {
   cobweb,
   cycles,
   equilibria,
-  exponent,
-  horizon,
-  path,
+  lyapunovExponent,
+  predictionHorizon,
+  trajectory,
 } from "../../src/dynamics/index.js";
 import { recurrence, rules } from "../../src/rule/index.js";
 
@@ -25,13 +25,12 @@ const doublings = [
 
 test("period doublings of the quadratic map are found to 1e-9", () => {
   const { places, stop } = bifurcations(quadratic, {
-    constant: "r",
-    from: 2.8,
-    to: 3.6,
-    start: 0.3,
-    most: 7,
+    vary: "r",
+    range: [2.8, 3.6],
+    initial: 0.3,
+    limit: 7,
   });
-  expect(stop).toBe("most");
+  expect(stop).toBe("limit");
   expect(places.map(({ kind, period }) => [kind, period])).toEqual(
     [1, 2, 4, 8, 16, 32, 64].map((n) => ["flip", n]),
   );
@@ -50,8 +49,8 @@ test("period doublings of the quadratic map are found to 1e-9", () => {
 
 // Source: Feigenbaum (1978): distances of the two points nearest the middle shrink by 2.502907875 from one doubling to
 // the next in the limit; at a cycle of 64 the second decimal has settled.
-test("cycles of the quadratic map shrink by Feigenbaum's second constant", () => {
-  const { places } = bifurcations(quadratic, { constant: "r", from: 2.8, to: 3.6, start: 0.3, most: 7 });
+test("cycles of the quadratic map shrink by Feigenbaum's second parameter", () => {
+  const { places } = bifurcations(quadratic, { vary: "r", range: [2.8, 3.6], initial: 0.3, limit: 7 });
   const gaps = places.slice(1).map(({ points, period }) => {
     const nearest = points.reduce(
       (best, x, i) => (Math.abs(x - 0.5) < Math.abs(points[best]! - 0.5) ? i : best),
@@ -65,12 +64,11 @@ test("cycles of the quadratic map shrink by Feigenbaum's second constant", () =>
 // Source: the same points for N + r N (1 - N/K), where mu = 1 + r: 2, 2.449490, 2.544090, 2.564407 (6 decimals).
 test("period doublings of the crowding rule are those of the quadratic map less one", () => {
   const { places } = bifurcations(recurrence("ΔN = r*N*(1 - N/K)"), {
-    constant: "r",
-    constants: { K: 1000 },
-    from: 1.7,
-    to: 2.57,
-    start: 300,
-    most: 4,
+    vary: "r",
+    parameters: { K: 1000 },
+    range: [1.7, 2.57],
+    initial: 300,
+    limit: 4,
   });
   places.forEach(({ at }, i) => {
     expect(relative(at, doublings[i]! - 1)).toBeLessThan(1e-9);
@@ -81,11 +79,10 @@ test("period doublings of the crowding rule are those of the quadratic map less 
 // Source: Newton's method on the period-n orbit with multiplier -1, 12 decimals; recalled as 2.5265, 2.6564, 2.6924.
 test("period doublings of the Ricker rule are found to 1e-9", () => {
   const { places } = bifurcations(recurrence("x[t+1] = x*exp(r*(1 - x))"), {
-    constant: "r",
-    from: 1.8,
-    to: 2.7,
-    start: 0.3,
-    most: 5,
+    vary: "r",
+    range: [1.8, 2.7],
+    initial: 0.3,
+    limit: 5,
   });
   [2, 2.526467725854, 2.656353265157, 2.684623358294, 2.690708802601].forEach((value, i) => {
     expect(relative(places[i]!.at, value)).toBeLessThan(1e-9);
@@ -97,7 +94,7 @@ test("period doublings of the Ricker rule are found to 1e-9", () => {
 
 // Source: the period-3 window opens at 1 + sqrt 8 exactly.
 test("the period-3 window opens where two cycles meet, at 1 + sqrt 8", () => {
-  const { places } = bifurcations(quadratic, { constant: "r", from: 3.835, to: 3.82, start: 0.3, most: 1 });
+  const { places } = bifurcations(quadratic, { vary: "r", range: [3.835, 3.82], initial: 0.3, limit: 1 });
   expect(places[0]!.kind).toBe("fold");
   expect(places[0]!.period).toBe(3);
   expect(relative(places[0]!.at, 1 + Math.sqrt(8))).toBeLessThan(1e-9);
@@ -105,7 +102,7 @@ test("the period-3 window opens where two cycles meet, at 1 + sqrt 8", () => {
 
 // Source: roots of the quadratic for the 2-cycle, 16 decimals; the multiplier 4 + 2 r - r^2 = 0.16.
 test("the 2-cycle of the quadratic map at 3.2", () => {
-  const found = cycles(quadratic, { period: 2, constants: { r: 3.2 }, within: unit });
+  const found = cycles(quadratic, { period: 2, parameters: { r: 3.2 }, range: unit });
   expect(found.search).toBe("every");
   expect(found.cycles).toHaveLength(1);
   const [cycle] = found.cycles;
@@ -117,12 +114,12 @@ test("the 2-cycle of the quadratic map at 3.2", () => {
 
 // Source: general tables of the quadratic map, 7 decimals: the 4-cycle at 3.5, the 3-cycle at 3.83.
 test("the 4-cycle at 3.5 and both 3-cycles at 3.83", () => {
-  const four = cycles(quadratic, { period: 4, constants: { r: 3.5 }, within: unit }).cycles;
+  const four = cycles(quadratic, { period: 4, parameters: { r: 3.5 }, range: unit }).cycles;
   expect(four).toHaveLength(1);
   expect([...four[0]!.points].sort()).toEqual(
     [0.3828197, 0.5008842, 0.8269407, 0.8749973].map((x) => expect.closeTo(x, 7)),
   );
-  const three = cycles(quadratic, { period: 3, constants: { r: 3.83 }, within: unit }).cycles;
+  const three = cycles(quadratic, { period: 3, parameters: { r: 3.83 }, range: unit }).cycles;
   expect(three.map(({ verdict }) => verdict).sort()).toEqual(["stable", "unstable"]);
   const stable = three.find(({ verdict }) => verdict === "stable")!;
   expect([...stable.points].sort()).toEqual(
@@ -132,7 +129,7 @@ test("the 4-cycle at 3.5 and both 3-cycles at 3.83", () => {
 
 // Source: counting: x' = 4x(1 - x) has (2^p - 2)/p cycles of prime period p, all unstable with multiplier of size 2^p.
 test.each([3, 5, 7])("all cycles of period %d of the chaotic quadratic map are found", (period) => {
-  const found = cycles(quadratic, { period, constants: { r: 4 }, within: unit }).cycles;
+  const found = cycles(quadratic, { period, parameters: { r: 4 }, range: unit }).cycles;
   expect(found).toHaveLength((2 ** period - 2) / period);
   for (const cycle of found) expect(cycle.multiplier.modulus / 2 ** period).toBeCloseTo(1, 6);
 });
@@ -143,8 +140,8 @@ test.each([
   [3.2, -0.916290731874, 1e-9],
   [3.5, -0.8725, 1e-4],
 ])("the exponent of the quadratic map at %d is %d", (r, value, tolerance) => {
-  const found = exponent(quadratic, {
-    constants: { r },
+  const found = lyapunovExponent(quadratic, {
+    parameters: { r },
     initial: { x: 0.3 },
     periods: 30_000,
     discard: 2_000,
@@ -163,7 +160,12 @@ test.each([
   [3.9, 0.496, 2e-3],
   [3.7, 0.355, 2e-3],
 ])("the exponent of the quadratic map at %d is %d, within the interval", (r, value, tolerance) => {
-  const found = exponent(quadratic, { constants: { r }, initial: { x: 0.3 }, periods: 300_000, level: 0.99 });
+  const found = lyapunovExponent(quadratic, {
+    parameters: { r },
+    initial: { x: 0.3 },
+    periods: 300_000,
+    level: 0.99,
+  });
   expect(Math.abs(found.value - value)).toBeLessThan(tolerance);
   expect(found.interval[0] - tolerance / 2).toBeLessThan(value);
   expect(found.interval[1] + tolerance / 2).toBeGreaterThan(value);
@@ -173,8 +175,8 @@ test.each([
 // Source: the exponent 0.419 of the quadratic map of the plane, as published to 3 digits (from memory).
 test("the exponent of a system is that of its fastest growing gap", () => {
   const plane = recurrence("x[t+1] = 1 - a*x^2 + y\ny[t+1] = b*x");
-  const found = exponent(plane, {
-    constants: { a: 1.4, b: 0.3 },
+  const found = lyapunovExponent(plane, {
+    parameters: { a: 1.4, b: 0.3 },
     initial: { x: 0.1, y: 0.1 },
     periods: 300_000,
   });
@@ -183,9 +185,9 @@ test("the exponent of a system is that of its fastest growing gap", () => {
 
 test("an exponent under a held input is that of the rule with the input's value", () => {
   const driven = recurrence("x[t+1] = r*x*(1 - x) + u[t+1] - u[t-1]", { inputs: ["u"] });
-  const options = { constants: { r: 3.2 }, initial: { x: 0.3 }, periods: 3000 };
-  const plain = exponent(quadratic, options).value;
-  expect(exponent(driven, { ...options, inputs: { u: 7 } }).value).toBeCloseTo(plain, 10);
+  const options = { parameters: { r: 3.2 }, initial: { x: 0.3 }, periods: 3000 };
+  const plain = lyapunovExponent(quadratic, options).value;
+  expect(lyapunovExponent(driven, { ...options, inputs: { u: 7 } }).value).toBeCloseTo(plain, 10);
 });
 
 // Source: slope 1 - b(1 - lam^(-1/b)), printed to 12 decimals.
@@ -193,14 +195,14 @@ test.each([
   [1, 0.1],
   [2, -0.367544467966],
 ])("the multiplier of the Hassell rule with b = %d is %d", (b, slope) => {
-  const { points } = equilibria(rules.hassell(), { constants: { lam: 10, a: 0.01, b }, within: [1, 5000] });
+  const { points } = equilibria(rules.hassell(), { parameters: { lam: 10, a: 0.01, b }, range: [1, 5000] });
   expect(points[0]!.multipliers[0]!.re).toBeCloseTo(slope, 11);
 });
 
 // Source: roots of the quadratic for both coordinates and of the characteristic polynomial, 13 and 8 decimals.
 test("the fixed points of a quadratic map of the plane and their multipliers", () => {
   const rule = recurrence("x[t+1] = 1 - a*x^2 + y\ny[t+1] = b*x");
-  const { points } = equilibria(rule, { constants: { a: 1.4, b: 0.3 }, within: { x: [-3, 3], y: [-3, 3] } });
+  const { points } = equilibria(rule, { parameters: { a: 1.4, b: 0.3 }, range: { x: [-3, 3], y: [-3, 3] } });
   expect(points).toHaveLength(2);
   const expected = [
     { x: -1.1313544770895, y: -0.3394063431269, roots: [3.2598221, -0.09202956] },
@@ -218,8 +220,8 @@ test("the fixed points of a quadratic map of the plane and their multipliers", (
 // Source: eigenvalues of the host-parasitoid rule, 8 decimals; their product lam ln lam/(lam - 1) exceeds 1.
 test("the host-parasitoid rest level turns outward", () => {
   const { points } = equilibria(rules.nicholsonBailey(), {
-    constants: { lam: 2, a: 0.1, c: 1 },
-    within: { H: [1, 100], P: [1, 100] },
+    parameters: { lam: 2, a: 0.1, c: 1 },
+    range: { H: [1, 100], P: [1, 100] },
   });
   const [first] = points[0]!.multipliers;
   expect(first!.re).toBeCloseTo(0.84657359, 8);
@@ -232,7 +234,7 @@ test("the host-parasitoid rest level turns outward", () => {
 test.each([0, 1, 2, 3])("density acting %d periods late is stable up to the known limit", (lag) => {
   const limit = 2 * Math.cos((Math.PI * lag) / (2 * lag + 1));
   const verdict = (r: number) =>
-    equilibria(rules.delayedDensity({ lag }), { constants: { r, K: 100 }, within: [50, 150] }).points[0]!;
+    equilibria(rules.delayedDensity({ lag }), { parameters: { r, K: 100 }, range: [50, 150] }).points[0]!;
   expect(verdict(limit * 0.999).verdict).toBe("stable");
   expect(verdict(limit * 1.001).verdict).toBe("unstable");
   expect(verdict(limit).boundary).toBe(lag === 0 ? "flip" : "neimark-sacker");
@@ -242,11 +244,10 @@ test.each([1, 2, 3])(
   "the limit with density acting %d periods late is found as a root, and turning",
   (lag) => {
     const { places } = bifurcations(rules.delayedDensity({ lag }), {
-      constant: "r",
-      constants: { K: 100 },
-      from: 0.2,
-      to: 1.5,
-      start: 100,
+      vary: "r",
+      parameters: { K: 100 },
+      range: [0.2, 1.5],
+      initial: 100,
     });
     expect(places.map(({ kind }) => kind)).toEqual(["neimark-sacker"]);
     expect(relative(places[0]!.at, 2 * Math.cos((Math.PI * lag) / (2 * lag + 1)))).toBeLessThan(1e-9);
@@ -256,11 +257,10 @@ test.each([1, 2, 3])(
 // Source: May (1978): the clumped host-parasitoid rule is stable if and only if k < 1, exactly.
 test("clumping holds a host and its parasitoid up to k = 1", () => {
   const { places } = bifurcations(rules.clumpedParasitoid(), {
-    constant: "k",
-    constants: { lam: 2, a: 0.1, c: 1 },
-    from: 0.5,
-    to: 1.5,
-    start: { H: 30, P: 15 },
+    vary: "k",
+    parameters: { lam: 2, a: 0.1, c: 1 },
+    range: [0.5, 1.5],
+    initial: { H: 30, P: 15 },
   });
   expect(places.map(({ kind }) => kind)).toEqual(["neimark-sacker"]);
   expect(relative(places[0]!.at, 1)).toBeLessThan(1e-9);
@@ -268,12 +268,10 @@ test("clumping holds a host and its parasitoid up to k = 1", () => {
 
 test("an attractor diagram shows the known cycles", () => {
   const diagram = attractor(quadratic, {
-    constant: "r",
-    from: 3.2,
-    to: 3.5,
-    columns: 2,
-    points: 8,
-    starts: [0.3],
+    vary: "r",
+    values: { from: 3.2, to: 3.5, count: 2 },
+    periods: 8,
+    initial: [0.3],
   });
   expect(new Set([...diagram.values.subarray(0, 8)].map((x) => x.toFixed(9))).size).toBe(2);
   expect(new Set([...diagram.values.subarray(8)].map((x) => x.toFixed(9))).size).toBe(4);
@@ -281,8 +279,8 @@ test("an attractor diagram shows the known cycles", () => {
 
 test("a collapse level divides the basins, with the chance of each", () => {
   const found = basins(rules.allee(), {
-    constants: { r: 0.2, K: 100, A: 20 },
-    within: [0, 110],
+    parameters: { r: 0.2, K: 100, A: 20 },
+    range: [0, 110],
     known: { mean: 20, sd: 5 },
   });
   expect(found.borders).toHaveLength(1);
@@ -296,13 +294,18 @@ test("a collapse level divides the basins, with the chance of each", () => {
 
 // Source: ln(tolerance/error)/ln 2 with the exponent ln 2 of the chaotic quadratic map.
 test("the horizon is the logarithm of the ratio over the exponent", () => {
-  const found = horizon(quadratic, { constants: { r: 4 }, initial: { x: 0.3 }, error: 1e-6, tolerance: 0.1 });
+  const found = predictionHorizon(quadratic, {
+    parameters: { r: 4 },
+    initial: { x: 0.3 },
+    error: 1e-6,
+    tolerance: 0.1,
+  });
   expect(Math.abs(found.periods - Math.log(1e5) / Math.LN2)).toBeLessThan(0.1);
 });
 
 test("a cobweb goes from the line to the curve and back", () => {
-  const web = cobweb(quadratic, { constants: { r: 2.8 }, initial: { x: 0.2 }, periods: 20 });
-  const run = path(quadratic, { constants: { r: 2.8 }, initial: { x: 0.2 }, periods: 20 });
+  const web = cobweb(quadratic, { parameters: { r: 2.8 }, initial: { x: 0.2 }, periods: 20 });
+  const run = trajectory(quadratic, { parameters: { r: 2.8 }, initial: { x: 0.2 }, periods: 20 });
   expect(web.web.y[1]).toBe(run.values["x"]![1]);
   expect(web.web.x).toHaveLength(41);
   expect(web.equilibria.map(({ verdict }) => verdict)).toContain("stable");
@@ -312,15 +315,15 @@ test("a cobweb goes from the line to the curve and back", () => {
 // where the slope of the rule is 1, and that place is an equilibrium under the catch.
 test("largest sustainable catches of the Ricker and Beverton-Holt rules leave a fold", () => {
   const ricker = equilibria(recurrence("N[t+1] = N*exp(r*(1 - N/K)) - H"), {
-    constants: { r: 1, K: 1000, H: 330.3661247616807 },
-    within: [100, 900],
+    parameters: { r: 1, K: 1000, H: 330.3661247616807 },
+    range: [100, 900],
   });
   expect(ricker.points.at(-1)!.at["N"]).toBeCloseTo(432.8567095902, 2);
   expect(Math.abs(ricker.points.at(-1)!.multipliers[0]!.re - 1)).toBeLessThan(1e-4);
   // K/(R - 1)(sqrt R - 1) and K/(R - 1)(sqrt R - 1)^2 for R 2, K 1000 in the form R N/(1 + (R - 1) N/K).
   const holt = equilibria(recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K) - H"), {
-    constants: { R: 2, K: 1000, H: 1000 * (Math.SQRT2 - 1) ** 2 },
-    within: [100, 900],
+    parameters: { R: 2, K: 1000, H: 1000 * (Math.SQRT2 - 1) ** 2 },
+    range: [100, 900],
   });
   expect(holt.points.at(-1)!.at["N"]).toBeCloseTo(414.213562373, 3);
   expect(1000 * (Math.SQRT2 - 1) ** 2).toBeCloseTo(171.572875254, 9);

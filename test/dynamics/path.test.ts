@@ -1,10 +1,10 @@
 import { expect, test } from "vitest";
-import { path } from "../../src/dynamics/index.js";
+import { trajectory } from "../../src/dynamics/index.js";
 import { recurrence, rules } from "../../src/rule/index.js";
 
 test("quantities are reported in the row that their period ends at", () => {
   const rule = recurrence("interest = i*owed\npaid = min(p, owed + interest)\nΔowed = interest - paid");
-  const run = path(rule, { constants: { i: 0.1, p: 50 }, initial: { owed: 100 }, periods: 3 });
+  const run = trajectory(rule, { parameters: { i: 0.1, p: 50 }, initial: { owed: 100 }, periods: 3 });
   expect([...run.values["owed"]!]).toEqual([100, 60, 16, expect.closeTo(0, 12)]);
   expect([...run.quantities["interest"]!]).toEqual([Number.NaN, 10, 6, expect.closeTo(1.6, 12)]);
   expect([...run.quantities["paid"]!]).toEqual([Number.NaN, 50, 50, expect.closeTo(17.6, 12)]);
@@ -12,7 +12,7 @@ test("quantities are reported in the row that their period ends at", () => {
 
 test("a path that leaves the finite range ends before it, with the period and the reason", () => {
   const rule = recurrence("N[t+1] = log(N) - c");
-  const { stop, values } = path(rule, { constants: { c: 1 }, initial: { N: 3 }, periods: 10 });
+  const { stop, values } = trajectory(rule, { parameters: { c: 1 }, initial: { N: 3 }, periods: 10 });
   expect(values["N"]).toHaveLength(3);
   expect(stop).toMatchInlineSnapshot(`
     {
@@ -25,7 +25,7 @@ test("a path that leaves the finite range ends before it, with the period and th
 
 test("a division by an input that is zero is named with its period", () => {
   const rule = recurrence("N[t+1] = N + 1/u", { inputs: ["u"] });
-  const { stop } = path(rule, { initial: { N: 3 }, inputs: { u: [1, 2, 0, 4] }, periods: 4 });
+  const { stop } = trajectory(rule, { initial: { N: 3 }, inputs: { u: [1, 2, 0, 4] }, periods: 4 });
   expect(stop).toMatchInlineSnapshot(`
     {
       "kind": "left-finite-range",
@@ -44,14 +44,14 @@ test.each([
   [150, 12],
 ])("a catch of %d from 500 ends the stock in year %s", (C, year) => {
   const rule = recurrence("ΔN = r*N*(1 - N/K) - C", { bounds: { N: [0, Number.POSITIVE_INFINITY] } });
-  const run = path(rule, { constants: { r: 0.5, K: 1000, C }, initial: { N: 500 }, periods: 200 });
+  const run = trajectory(rule, { parameters: { r: 0.5, K: 1000, C }, initial: { N: 500 }, periods: 200 });
   expect(run.stop.kind === "left-bounds" ? run.stop.period : undefined).toBe(year);
   if (year === undefined) expect(run.values["N"]!.at(-1)).toBe(500);
 });
 
 test("a named rule is not run outside its range", () => {
   expect(() =>
-    path(rules.logistic(), { constants: { r: 2.5, K: 100 }, initial: { N: 150 }, periods: 3 }),
+    trajectory(rules.logistic(), { parameters: { r: 2.5, K: 100 }, initial: { N: 150 }, periods: 3 }),
   ).toThrowErrorMatchingInlineSnapshot(
     `[ModelError: Quadratic rule (discrete logistic) means what it says only where N0 >= 0 and N0 <= K*(1 + 1/r); given were N0 = 150, K = 100, r = 2.5. Choose values inside the range, or write the rule out with recurrence to run it regardless.]`,
   );
@@ -59,10 +59,10 @@ test("a named rule is not run outside its range", () => {
 
 test("inputs must reach as far as the path, and at [t+1] one further", () => {
   const rule = recurrence("owed[t+1] = owed - paid[t+1]", { inputs: ["paid"] });
-  const run = path(rule, { initial: { owed: 10 }, inputs: { paid: [0, 1, 2, 3] }, periods: 3 });
+  const run = trajectory(rule, { initial: { owed: 10 }, inputs: { paid: [0, 1, 2, 3] }, periods: 3 });
   expect([...run.values["owed"]!]).toEqual([10, 9, 7, 4]);
   expect(() =>
-    path(rule, { initial: { owed: 10 }, inputs: { paid: [0, 1, 2, 3] }, periods: 4 }),
+    trajectory(rule, { initial: { owed: 10 }, inputs: { paid: [0, 1, 2, 3] }, periods: 4 }),
   ).toThrowErrorMatchingInlineSnapshot(
     `[ModelError: The input "paid" is needed at period 4, and the values given reach from period 0 to 3. Give values for every period of the path, or shorten it.]`,
   );
@@ -70,23 +70,23 @@ test("inputs must reach as far as the path, and at [t+1] one further", () => {
 
 test("a rule with lags needs its history, oldest first", () => {
   const rule = recurrence("F[t+1] = F + F[t-2]");
-  const run = path(rule, { initial: { F: [1, 2, 3] }, periods: 4 });
+  const run = trajectory(rule, { initial: { F: [1, 2, 3] }, periods: 4 });
   expect([...run.values["F"]!]).toEqual([3, 4, 6, 9, 13]);
-  expect(() => path(rule, { initial: { F: 1 }, periods: 4 })).toThrowErrorMatchingInlineSnapshot(
+  expect(() => trajectory(rule, { initial: { F: 1 }, periods: 4 })).toThrowErrorMatchingInlineSnapshot(
     `[ModelError: The rule reads "F" up to 2 periods back, so it needs 3 first values, oldest first; 1 were given. Give initial: { F: [ ... ] } with 3 numbers.]`,
   );
 });
 
-test("missing and strange constants are refused by name", () => {
+test("missing and strange parameters are refused by name", () => {
   const rule = rules.bevertonHolt();
   expect(() =>
-    path(rule, { constants: { R: 2 }, initial: { N: 1 }, periods: 1 }),
+    trajectory(rule, { parameters: { R: 2 }, initial: { N: 1 }, periods: 1 }),
   ).toThrowErrorMatchingInlineSnapshot(
-    `[ModelError: The rule needs a value for the constant "K", and none was given. Given: R.]`,
+    `[ModelError: The rule needs a value for the parameter "K", and none was given. Given: R.]`,
   );
   expect(() =>
-    path(rule, { constants: { R: 2, K: 1, k: 3 }, initial: { N: 1 }, periods: 1 }),
+    trajectory(rule, { parameters: { R: 2, K: 1, k: 3 }, initial: { N: 1 }, periods: 1 }),
   ).toThrowErrorMatchingInlineSnapshot(
-    `[ModelError: The rule has no constant called "k". It has: R, K. Did you mean "K" or "R"?]`,
+    `[ModelError: The rule has no parameter called "k". It has: R, K. Did you mean "K" or "R"?]`,
   );
 });

@@ -25,7 +25,7 @@ test.each(["exponential truth fitted with a capacity", "only a product enters"])
   "what a design cannot determine is called so: %s",
   (name) => {
     const design = named(name);
-    const told = coverageOf(design, records, 7).find(({ constant }) => constant === design.undetermined)!;
+    const told = coverageOf(design, records, 7).find(({ parameter }) => parameter === design.undetermined)!;
     expect(told.undetermined * records).toBeGreaterThanOrEqual(51);
   },
 );

@@ -1,5 +1,5 @@
 import { expect, test } from "vitest";
-import { extend, fit } from "../../src/estimate/index.js";
+import { fit, updateFit } from "../../src/estimate/index.js";
 import { recurrence } from "../../src/rule/index.js";
 import { record } from "./record.js";
 
@@ -10,7 +10,7 @@ const first = fit(sheltered, record({ N: values.slice(0, 9) }), options);
 
 test("later rows give the fit of the whole record, also over a gap", () => {
   const later = record({ t: [10, 11], N: values.slice(10) });
-  const { fit: now, added, changes } = extend(first, later);
+  const { fit: now, added, changes } = updateFit(first, later);
   const kept = [0, 1, 2, 3, 4, 5, 6, 7, 8, 10, 11];
   const whole = fit(sheltered, record({ t: kept, N: kept.map((t) => values[t]!) }), options);
   expect(now.groups[0]!.estimates.map(({ value }) => value)).toEqual(
@@ -21,11 +21,11 @@ test("later rows give the fit of the whole record, also over a gap", () => {
 });
 
 test("an estimate that moves far is pointed out", () => {
-  const { remarks } = extend(first, record({ t: [9, 10, 11], N: [60, 50, 40] }));
+  const { remarks } = updateFit(first, record({ t: [9, 10, 11], N: [60, 50, 40] }));
   expect(remarks.join(" ")).toMatch(/moved from .* standard errors: check whether the rule still holds/);
 });
 
 test("rows that the fit already has are refused, and no rows", () => {
   const again = record({ t: [8, 9], N: [67, 75] });
-  expect(() => extend(first, again)).toThrow(expect.objectContaining({ code: "rows-overlap" }));
+  expect(() => updateFit(first, again)).toThrow(expect.objectContaining({ code: "rows-overlap" }));
 });

@@ -56,7 +56,7 @@ describe("a trajectory fit", () => {
     near(of(holes, "K").value, closed.estimates[1]!, 1e-8);
   });
 
-  test("holds what is given: fixed constants, a known first value, bounds", () => {
+  test("holds what is given: fixed parameters, a known first value, bounds", () => {
     const fixed = fit(sheltered, record({ N: values }), {
       errors: "observation",
       fixed: { K: 100 },
@@ -85,7 +85,7 @@ describe("a trajectory fit", () => {
   });
 
   test("takes a known standard deviation as it is", () => {
-    const known = fit(sheltered, record({ N: values }), { errors: "observation", spread: { sd: 2 } });
+    const known = fit(sheltered, record({ N: values }), { errors: "observation", sd: 2 });
     near(of(known, "K").value, of(fitted, "K").value, 1e-8);
     near(of(known, "K").standardError, (of(fitted, "K").standardError! * 2) / fitted.groups[0]!.sigma, 1e-6);
   });
@@ -180,7 +180,7 @@ describe("what the record does not determine", () => {
   test("only a product enters: neither factor gets an error", () => {
     const rule = recurrence("N[t+1] = (p*q)*N");
     const grown = values.slice(0, 9).map((_, t) => 10 * 1.2 ** t * (t % 2 ? 1.02 : 0.99));
-    const fitted = fit(rule, record({ N: grown }), { errors: "observation", spread: "proportional" });
+    const fitted = fit(rule, record({ N: grown }), { errors: "observation", distribution: "lognormal" });
     expect(of(fitted, "p").standardError).toBeUndefined();
     expect(of(fitted, "q").standardError).toBeUndefined();
     expect(of(fitted, "N[0]").standardError).toBeGreaterThan(0);
@@ -192,14 +192,14 @@ describe("what the record does not determine", () => {
 
   test("a capacity far beyond an exponential record has no upper limit", () => {
     const grown = Array.from({ length: 12 }, (_, t) => 10 * 1.2 ** t * (t % 2 ? 1.01 : 0.99));
-    const fitted = fit(sheltered, record({ N: grown }), { errors: "observation", spread: "proportional" });
+    const fitted = fit(sheltered, record({ N: grown }), { errors: "observation", distribution: "lognormal" });
     expect(of(fitted, "K").standardError).toBeUndefined();
   });
 });
 
 test("the same record and options give the same digits", () => {
-  const once = fit(sheltered, record({ N: values }), { errors: "observation", spread: "proportional" });
-  const again = fit(sheltered, record({ N: values }), { errors: "observation", spread: "proportional" });
+  const once = fit(sheltered, record({ N: values }), { errors: "observation", distribution: "lognormal" });
+  const again = fit(sheltered, record({ N: values }), { errors: "observation", distribution: "lognormal" });
   expect(JSON.stringify(again.groups)).toBe(JSON.stringify(once.groups));
 });
 
@@ -260,14 +260,14 @@ test("a censored fit is that of least squares where next to nothing is censored"
   near(width(of(censored, "K")), width(of(plain, "K")), 0.1);
 });
 
-test("a second solver finds the same constants", () => {
+test("a second solver finds the same parameters", () => {
   const fitted = fit(sheltered, record({ N: values }), { errors: "observation" });
   const { digits, sentence } = secondOpinion(fitted, fitted.groups[0]!);
   expect(digits).toBeGreaterThanOrEqual(6);
   expect(sentence).toMatch(/^A second solver \(ml-levenberg-marquardt\) agrees to \d+ digits\.$/);
 });
 
-test("two constants of which only the product is well known are named with it", () => {
+test("two parameters of which only the product is well known are named with it", () => {
   // theta-logistic near its rest level: only r*theta, the slope there, is told by small departures from it.
   const rule = recurrence("N[t+1] = N*exp(r*(1 - (N/100)^theta))");
   const N = [92];

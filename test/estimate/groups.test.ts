@@ -18,7 +18,7 @@ function cultures(count: number, mean: number, spread: number, seed: number): Re
   });
   return Object.fromEntries(made);
 }
-const options = { errors: "observation", spread: "proportional" } as const;
+const options = { errors: "observation", distribution: "lognormal" } as const;
 const population = (fitted: Fit, name: string) => fitted.population!.find((each) => each.name === name)!;
 
 describe("groups of a record", () => {
@@ -54,7 +54,7 @@ describe("groups of a record", () => {
   test("mixed: the population's mean and spread lie where the groups were drawn from", () => {
     const mixed = fit(sheltered, record(cultures(12, 1.5, 0.08, 3)), { ...options, groups: "mixed" });
     const mean = population(mixed, "R");
-    const spread = population(mixed, "spread of R among groups");
+    const spread = population(mixed, "between-group sd of R");
     expect(Math.abs(mean.value - 1.5)).toBeLessThan(3 * mean.standardError!);
     expect(spread.profile.lower!).toBeLessThan(0.08);
     expect(spread.profile.upper!).toBeGreaterThan(0.08);

@@ -20,15 +20,15 @@ function stock(inputs: readonly string[] | Readonly<Record<string, string>>): Ob
   return observations(tableOf(rows), { period: "year", step, value: "index", inputs });
 }
 
-const trajectory = { errors: "observation", spread: "proportional" } as const;
+const trajectory = { errors: "observation", distribution: "lognormal" } as const;
 const own = "Δindex = r*index*(1 - index/K) - catch";
 
-test("a fit warns when the rule takes a recorded input for a constant", () => {
+test("a fit warns when the rule takes a recorded input for a parameter", () => {
   expect(fit(recurrence(own), stock(["catch"]), trajectory).warnings).toMatchInlineSnapshot(`
     [
       {
-        "code": "input-taken-as-constant",
-        "message": "The record holds an input "catch", but the rule takes catch as a constant: write recurrence(..., { inputs: ["catch"] }).",
+        "code": "input-taken-as-parameter",
+        "message": "The record holds an input "catch", but the rule takes catch as a parameter: write recurrence(..., { inputs: ["catch"] }).",
       },
     ]
   `);
@@ -43,7 +43,7 @@ test("a fit warns of an input that the rule does not read, and says how a named 
   );
   const told = fit(rules.schaefer({ inputs: ["C"] }), stock({ C: "catch" }), trajectory);
   expect(told.warnings).toEqual([]);
-  // The constants that made the record, within the intervals that the fit gives.
+  // The parameters that made the record, within the intervals that the fit gives.
   const [r, K] = told.groups[0]!.estimates;
   expect(r!.profile.lower).toBeLessThan(0.42);
   expect(r!.profile.upper).toBeGreaterThan(0.42);
@@ -58,11 +58,11 @@ function holds({ value, profile }: Estimate, other: number): boolean {
   return other >= lower - slack && other <= upper + slack;
 }
 
-test.each(["constant", "proportional"] as const)(
-  "no interval leaves out a rival optimum, spread %s",
+test.each(["normal", "lognormal"] as const)(
+  "no interval leaves out a rival optimum, distribution %s",
   (spread) => {
     for (const rule of [rules.schaefer(), recurrence(own)]) {
-      const group = fit(rule, stock(["catch"]), { errors: "observation", spread }).groups[0]!;
+      const group = fit(rule, stock(["catch"]), { errors: "observation", distribution: spread }).groups[0]!;
       const within = group.rivals.filter(({ behind }) => 2 * behind < group.cut);
       for (const { estimates } of within)
         expect(group.estimates.filter((each, i) => !holds(each, estimates[i]!))).toEqual([]);
@@ -70,7 +70,7 @@ test.each(["constant", "proportional"] as const)(
   },
 );
 
-test("constants that run away together are not determined, and no interval of theirs closes beside the estimate", () => {
+test("parameters that run away together are not determined, and no interval of theirs closes beside the estimate", () => {
   const [group] = fit(recurrence(own), stock(["catch"]), trajectory).groups;
   const open = group!.warnings.filter(({ code }) => code === "not-determined").map(({ message }) => message);
   expect(open.join(" ")).toContain(

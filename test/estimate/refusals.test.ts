@@ -24,7 +24,7 @@ test("a fit that does not say where it puts the error", () => {
 
 test("fewer values than unknowns + 3", () => {
   expect(said(sheltered, record({ N: [10, 14, 19, 26] }), trajectory)).toMatchInlineSnapshot(
-    `"4 usable values for 3 unknowns (R, K, N[0]): not fitted. At least 6 are needed; use a rule with fewer constants, fix some with { fixed }, or wait for more rows."`,
+    `"4 usable values for 3 unknowns (R, K, N[0]): not fitted. At least 6 are needed; use a rule with fewer parameters, fix some with { fixed }, or wait for more rows."`,
   );
 });
 
@@ -36,15 +36,15 @@ test("a value that never changes", () => {
 
 test("a level without logarithm", () => {
   const zero = record({ N: [10, 14, 0, 26, 35, 46, 58, 70] });
-  expect(said(sheltered, zero, { ...trajectory, spread: "proportional" })).toMatchInlineSnapshot(
-    `"Row 3: level 0 has no logarithm, which proportional spread needs. Choose { spread: "constant" }, or leave the row out with a reason."`,
+  expect(said(sheltered, zero, { ...trajectory, distribution: "lognormal" })).toMatchInlineSnapshot(
+    `"Row 3: level 0 has no logarithm, which a lognormal distribution needs. Choose { distribution: "normal" }, or leave the row out with a reason."`,
   );
 });
 
 test("values that are no counts", () => {
   const half = record({ N: [10, 14, 19.5, 26, 35, 46, 58, 70] });
-  expect(said(sheltered, half, { ...trajectory, spread: "poisson" })).toMatchInlineSnapshot(
-    `"Row 3: 19.5 is not a count, which a Poisson or negative binomial spread needs. Give whole numbers from 0, or choose { spread: "constant" } or { spread: "proportional" }."`,
+  expect(said(sheltered, half, { ...trajectory, distribution: "poisson" })).toMatchInlineSnapshot(
+    `"Row 3: 19.5 is not a count, which a Poisson or negative binomial distribution needs. Give whole numbers from 0, or choose { distribution: "normal" } or { distribution: "lognormal" }."`,
   );
 });
 
@@ -67,13 +67,13 @@ test("a rule that explodes wherever it is begun", () => {
   const explosive = recurrence("N[t+1] = N*exp(r*N)");
   const options: FitOptions = { ...trajectory, start: { r: 5 }, initial: { N: 10 } };
   expect(said(explosive, grown, options)).toMatchInlineSnapshot(
-    `"No constants were found at which "N[t+1] = N*exp(r*N)" stays finite over the record. Give { start: { ... } } near plausible values, or { bounds: { ... } } that keep the rule in its range."`,
+    `"No parameters were found at which "N[t+1] = N*exp(r*N)" stays finite over the record. Give { start: { ... } } near plausible values, or { bounds: { ... } } that keep the rule in its range."`,
   );
 });
 
 test("a rule that jumps", () => {
   expect(said(recurrence("N[t+1] = round(R*N, 0)"), grown, trajectory)).toMatchInlineSnapshot(
-    `""N[t+1] = round(R*N, 0)" jumps at round(...), so its constants have no best value that a search could find: small changes of them change nothing, and then a whole step. Fit the rule without the rounding; keep it for schedules and projections."`,
+    `""N[t+1] = round(R*N, 0)" jumps at round(...), so its parameters have no best value that a search could find: small changes of them change nothing, and then a whole step. Fit the rule without the rounding; keep it for schedules and projections."`,
   );
 });
 
@@ -93,7 +93,7 @@ test("an input that is missing in a period", () => {
 
 test("names that the rule does not have", () => {
   expect(said(sheltered, grown, { ...trajectory, fixed: { capacity: 100 } })).toMatchInlineSnapshot(
-    `"The rule has no constant "capacity". It has: R, K."`,
+    `"The rule has no parameter "capacity". It has: R, K."`,
   );
   const two = recurrence("A[t+1] = p*A\nB[t+1] = q*B");
   expect(said(two, grown, trajectory)).toMatchInlineSnapshot(
@@ -102,11 +102,11 @@ test("names that the rule does not have", () => {
 });
 
 test("spreads and factors that no fit has", () => {
-  expect(said(sheltered, grown, { ...trajectory, spread: { sd: -1 } })).toMatchInlineSnapshot(
-    `"The standard deviation -1 of { spread: { sd } } is not a positive number. Give it in the unit of the record."`,
+  expect(said(sheltered, grown, { ...trajectory, sd: -1 })).toMatchInlineSnapshot(
+    `"Option \`sd\` is -1, with \`distribution: "normal"\`. Give a positive number: in the unit of the record for \`normal\`, on the log scale for \`lognormal\`."`,
   );
-  expect(said(sheltered, grown, { errors: "both", spread: "poisson" })).toMatchInlineSnapshot(
-    `"There is no fit with the spread poisson with errors in both. Choose "constant", "proportional", "poisson", "negative-binomial" or { sd }; counts only with errors in the process or in the observation."`,
+  expect(said(sheltered, grown, { errors: "both", distribution: "poisson" })).toMatchInlineSnapshot(
+    `"Option \`distribution\` must be "normal", "lognormal", "poisson" or "negative-binomial"; poisson with errors in both was given. Counts go with \`errors: "process"\` or \`errors: "observation"\`."`,
   );
   expect(said(sheltered, grown, { errors: "process", factor: { N: "q" } })).toMatchInlineSnapshot(
     `"A factor of the record is found from whole trajectories, not with errors: "process". Use { errors: "observation" }, or write the factor into the rule."`,

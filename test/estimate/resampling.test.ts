@@ -12,7 +12,7 @@ describe("bootstrap", () => {
   test.each(["parametric", "residual", "block"] as const)(
     "by %s errors agrees with the curvature",
     (errors) => {
-      const { rows, used } = bootstrap(fitted, { errors, draws: 400 });
+      const { rows, used } = bootstrap(fitted, { errors, resamples: 400 });
       expect(used).toBe(400);
       rows.forEach((row, i) => {
         const { standardError, value } = fitted.groups[0]!.estimates[i]!;
@@ -26,19 +26,21 @@ describe("bootstrap", () => {
   );
 
   test("repeats its digits for a seed, and stops when asked to", () => {
-    const once = bootstrap(fitted, { draws: 200, seed: 9 });
-    expect(bootstrap(fitted, { draws: 200, seed: 9 }).rows).toEqual(once.rows);
-    const stopped = bootstrap(fitted, { draws: 900, onProgress: (done) => done < 300 });
+    const once = bootstrap(fitted, { resamples: 200, seed: 9 });
+    expect(bootstrap(fitted, { resamples: 200, seed: 9 }).rows).toEqual(once.rows);
+    const stopped = bootstrap(fitted, { resamples: 900, onProgress: (done) => done < 300 });
     expect(stopped.used).toBe(300);
   });
 
   test("refuses what it cannot resample, and too few draws", () => {
     const counts = fit(recurrence("D[t+1] = D"), record({ D: [3, 5, 4, 6, 2] }), {
       errors: "observation",
-      spread: "poisson",
+      distribution: "poisson",
     });
     expect(() => bootstrap(counts)).toThrow(expect.objectContaining({ code: "not-by-least-squares" }));
-    expect(() => bootstrap(fitted, { draws: 5 })).toThrow(expect.objectContaining({ code: "too-few-draws" }));
+    expect(() => bootstrap(fitted, { resamples: 5 })).toThrow(
+      expect.objectContaining({ code: "too-few-draws" }),
+    );
   });
 });
 
@@ -58,7 +60,7 @@ describe("gridInterval", () => {
       for (let t = 0; t < 30; t++) x.push(x[t]! + stream.normal());
       const line = fit(rule, record({ x }), { errors: "process" });
       const { profile } = line.groups[0]!.estimates[1]!;
-      const grid = gridInterval(line, "b", { draws: 99 });
+      const grid = gridInterval(line, "b", { resamples: 99 });
       if (holds(profile, 1)) covered.profile++;
       if (holds(grid, 1)) covered.grid++;
     }
@@ -67,9 +69,9 @@ describe("gridInterval", () => {
     expect(covered.profile).toBeLessThan(covered.grid);
   });
 
-  test("agrees with the profile where the rule is nearly linear in its constants", () => {
+  test("agrees with the profile where the rule is nearly linear in its parameters", () => {
     const { profile, standardError } = fitted.groups[0]!.estimates[0]!;
-    const grid = gridInterval(fitted, "R", { draws: 399 });
+    const grid = gridInterval(fitted, "R", { resamples: 399 });
     expect(Math.abs(grid.lower! - profile.lower!)).toBeLessThan(0.4 * standardError!);
     expect(Math.abs(grid.upper! - profile.upper!)).toBeLessThan(0.4 * standardError!);
   });
@@ -81,7 +83,7 @@ test("a state-space fit is resampled from both its errors", () => {
   for (let t = 1; t < 50; t++) x.push(2 + 0.6 * x[t - 1]! + stream.normal());
   const read = x.map((value) => value + 0.7 * stream.normal());
   const both = fit(recurrence("x[t+1] = a + b*x"), record({ x: read }), { errors: "both" });
-  const { rows, used } = bootstrap(both, { draws: 100 });
+  const { rows, used } = bootstrap(both, { resamples: 100 });
   expect(used).toBeGreaterThan(90);
   const slope = rows.find(({ name }) => name === "b")!;
   expect(slope.interval.lower!).toBeLessThan(slope.estimate);

@@ -47,7 +47,7 @@ describe("errors in both the process and the observation", () => {
   test("a rule that is not linear on the scale is filtered by its slope, and finds what made the record", () => {
     const rule = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)");
     const N = wandering((level) => (1.5 * level) / (1 + (0.5 * level) / 100), 5, 80, 4);
-    const fitted = fit(rule, record({ N }), { errors: "both", spread: "proportional" });
+    const fitted = fit(rule, record({ N }), { errors: "both", distribution: "lognormal" });
     expect(fitted.groups[0]!.filter).toMatchObject({ start: "diffuse", method: "extended" });
     const { lower, upper } = of(fitted, "K").profile;
     expect(lower!).toBeLessThan(100);
@@ -76,7 +76,7 @@ describe("errors in both the process and the observation", () => {
     const read = x.map((value) => value + 0.5 * stream.normal());
     const rule = recurrence("x[t+1] = b*x");
     const open = fit(rule, record({ x: read }), { errors: "both" });
-    const known = fit(rule, record({ x: read }), { errors: "both", spread: { sd: 0.5 } });
+    const known = fit(rule, record({ x: read }), { errors: "both", sd: 0.5 });
     expect(known.groups[0]!.estimates.map(({ name }) => name)).toEqual(["b", "process error"]);
     const width = ({ profile }: Estimate): number =>
       (profile.upper ?? Infinity) - (profile.lower ?? -Infinity);

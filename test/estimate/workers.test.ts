@@ -15,8 +15,8 @@ for (let number = workerData.first; number < 60; number += workerData.step) {
   const week = [...Array(15).keys()];
   const value = week.map((t) => (100 + number) / (1 + 9 * 1.6 ** -t) * (1 + 0.05 * Math.sin(7.3 * t + number)));
   const record = observations({ week, value }, { period: "week", step: { every: 1, of: "week" }, value: "value" });
-  const fitted = fit(rule, record, { errors: "observation", spread: "proportional" });
-  const drawn = number < 4 ? bootstrap(fitted, { seed: number, draws: 100 }) : undefined;
+  const fitted = fit(rule, record, { errors: "observation", distribution: "lognormal" });
+  const drawn = number < 4 ? bootstrap(fitted, { seed: number, resamples: 100 }) : undefined;
   found.push([number, JSON.stringify([fitted.groups[0].estimates, drawn])]);
 }
 parentPort.postMessage(found);

@@ -5,7 +5,7 @@ import { recurrence } from "../../src/rule/index.js";
 import { series } from "./series.js";
 
 const crowding = recurrence("N[t+1] = N*exp(r*(1 - N/K))");
-const onLog = { spread: "proportional" } as const;
+const onLog = { distribution: "lognormal" } as const;
 
 /** Steps of the crowding rule with lognormal errors of 10%, K going from 100 to `after` in period 22. */
 function stepped(after: number, seed: number): number[] {
@@ -20,15 +20,15 @@ function stepped(after: number, seed: number): number[] {
 }
 
 describe("changePoint", () => {
-  test("dates a change of a constant, and tells both sets of constants", () => {
+  test("dates a change of a parameter, and tells both sets of parameters", () => {
     const [found] = changePoint(crowding, series(stepped(55, 3)), onLog).groups;
     expect(found!.found).toBe(true);
     expect(found!.earliest).toBeLessThanOrEqual(22);
     expect(found!.latest).toBeGreaterThanOrEqual(22);
-    expect(found!.before.constants["K"]!).toBeGreaterThan(85);
-    expect(found!.after.constants["K"]!).toBeLessThan(70);
+    expect(found!.before.parameters["K"]!).toBeGreaterThan(85);
+    expect(found!.after.parameters["K"]!).toBeLessThan(70);
     expect(found!.sentence).toMatch(
-      /^The rule changed from period \d+ on \(95% interval .*Project with the constants after it only\.$/,
+      /^The rule changed from period \d+ on \(95% interval .*Project with the parameters after it only\.$/,
     );
   });
 
@@ -36,7 +36,9 @@ describe("changePoint", () => {
   test("calls a break in 5% of records without one", () => {
     let alarms = 0;
     for (let k = 0; k < 120; k++)
-      if (changePoint(crowding, series(stepped(100, k)), { ...onLog, draws: 99, seed: k }).groups[0]!.found)
+      if (
+        changePoint(crowding, series(stepped(100, k)), { ...onLog, resamples: 99, seed: k }).groups[0]!.found
+      )
         alarms++;
     expect(Math.abs(alarms / 120 - 0.05)).toBeLessThan(0.08);
   });
@@ -44,7 +46,7 @@ describe("changePoint", () => {
   test("its interval holds the date in 90% of records with a break", () => {
     let inside = 0;
     for (let k = 0; k < 60; k++) {
-      const [found] = changePoint(crowding, series(stepped(60, k)), { ...onLog, draws: 99 }).groups;
+      const [found] = changePoint(crowding, series(stepped(60, k)), { ...onLog, resamples: 99 }).groups;
       if (found!.earliest <= 22 && 22 <= found!.latest) inside++;
     }
     expect(inside).toBeGreaterThanOrEqual(54);
@@ -54,7 +56,7 @@ describe("changePoint", () => {
   test("the largest F of a mean that changes is the one of all two-part means", () => {
     const values = [3.1, 2.7, 3.4, 2.9, 3.3, 2.8, 4.4, 4.9, 4.2, 4.7, 4.5, 4.1];
     const rule = recurrence("N[t+1] = c");
-    const [found] = changePoint(rule, series(values), { draws: 99 }).groups;
+    const [found] = changePoint(rule, series(values), { resamples: 99 }).groups;
     const squares = (part: readonly number[]): number => {
       const mean = part.reduce((sum, value) => sum + value, 0) / part.length;
       return part.reduce((sum, value) => sum + (value - mean) ** 2, 0);
@@ -69,7 +71,7 @@ describe("changePoint", () => {
 
   test("refuses a record too short to be parted", () => {
     expect(() => changePoint(crowding, series([1, 2, 3, 5, 6, 7]), onLog)).toThrowErrorMatchingInlineSnapshot(
-      `[ModelError: 5 steps leave no date with enough of them on either side to fit the rule twice. Use a rule with fewer constants, hold some with { fixed }, or wait for more rows.]`,
+      `[ModelError: 5 steps leave no date with enough of them on either side to fit the rule twice. Use a rule with fewer parameters, hold some with { fixed }, or wait for more rows.]`,
     );
   });
 });

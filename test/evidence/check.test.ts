@@ -13,8 +13,8 @@ const sheltered = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)");
 describe("check", () => {
   // Source: computed with R 4.2 and SciPy for a made-up culture of 21 readings; printed to 3 decimals.
   test("C-2: residuals of neighbouring readings correlate -0.285 step by step and 0.152 along the path", () => {
-    const along = check(fit(sheltered, culture, { errors: "observation", spread: "proportional" }));
-    const steps = check(fit(sheltered, culture, { errors: "process", spread: "proportional" }));
+    const along = check(fit(sheltered, culture, { errors: "observation", distribution: "lognormal" }));
+    const steps = check(fit(sheltered, culture, { errors: "process", distribution: "lognormal" }));
     const lagOne = (checked: typeof along): number => checked.groups[0]!.tests[0]!.statistic;
     expect(Math.abs(lagOne(along) - 0.152)).toBeLessThan(5e-4);
     expect(Math.abs(lagOne(steps) + 0.285)).toBeLessThan(5e-4);
@@ -22,18 +22,18 @@ describe("check", () => {
   });
 
   // Source: the binomial distribution; with 400 refits the share of 95% lies within 4 errors, 0.044, of it.
-  test("finds the constants of a linear rule again without bias, at the stated level", () => {
+  test("finds the parameters of a linear rule again without bias, at the stated level", () => {
     const rule = recurrence("N[t+1] = N + c");
     const stream = randomStream(3);
     const values = Float64Array.from({ length: 30 }, (_, t) => 20 + 1.5 * t + stream.normal());
-    const checked = check(fit(rule, series(values), { errors: "observation" }), { refits: 400 });
-    for (const unknown of checked.groups[0]!.recovery!.unknowns) {
+    const checked = check(fit(rule, series(values), { errors: "observation" }), { resamples: 400 });
+    for (const unknown of checked.groups[0]!.recovery!.parameters) {
       expect(Math.abs(unknown.coverage - 0.95)).toBeLessThan(0.044);
       expect(Math.abs(unknown.bias)).toBeLessThan((4 * unknown.deviation) / Math.sqrt(400));
     }
   });
 
-  test("says that a constant hangs on one row", () => {
+  test("says that a parameter hangs on one row", () => {
     const values = drawn(sheltered, [1.5, 100], 5, 24, 0.02, "observation", randomStream(5));
     values[23] = 125;
     const checked = check(fit(sheltered, series(values), { errors: "observation" }));
@@ -43,7 +43,7 @@ describe("check", () => {
   });
 
   test("gives the same digits for the same seed", () => {
-    const fitted = fit(sheltered, culture, { errors: "observation", spread: "proportional" });
+    const fitted = fit(sheltered, culture, { errors: "observation", distribution: "lognormal" });
     expect(check(fitted, { seed: 4 })).toEqual(check(fitted, { seed: 4 }));
     expect(check(fitted, { seed: 4 }).groups[0]!.recovery).not.toEqual(
       check(fitted, { seed: 5 }).groups[0]!.recovery,
@@ -58,8 +58,8 @@ describe("check", () => {
   });
 
   test("refuses fewer than fifty refits", () => {
-    const fitted = fit(sheltered, culture, { errors: "observation", spread: "proportional" });
-    expect(() => check(fitted, { refits: 10 })).toThrowErrorMatchingInlineSnapshot(
+    const fitted = fit(sheltered, culture, { errors: "observation", distribution: "lognormal" });
+    expect(() => check(fitted, { resamples: 10 })).toThrowErrorMatchingInlineSnapshot(
       `[ModelError: Recovery needs at least 50 refits to tell a share of intervals; 10 given. Leave { refits } out for 200.]`,
     );
   });
@@ -73,8 +73,8 @@ describe("advice on the kind of error", () => {
       const stream = randomStream(17);
       const found = Array.from({ length: 40 }, () => {
         const values = drawn(sheltered, [1.4, 100], 5, 40, 0.1, errors, stream);
-        const fitted = fit(sheltered, series(values), { errors, spread: "proportional" });
-        return check(fitted, { refits: 50 }).groups[0]!.errors?.kind ?? "undecided";
+        const fitted = fit(sheltered, series(values), { errors, distribution: "lognormal" });
+        return check(fitted, { resamples: 50 }).groups[0]!.errors?.kind ?? "undecided";
       });
       expect(found.filter((kind) => kind === errors).length).toBeGreaterThanOrEqual(30);
       expect(found.filter((kind) => kind !== errors && kind !== "undecided").length).toBeLessThanOrEqual(4);
@@ -85,10 +85,10 @@ describe("advice on the kind of error", () => {
 describe("fits that are not of least squares", () => {
   test("both kinds of error at once are tried on drawn records too", () => {
     const values = drawn(sheltered, [1.4, 100], 8, 40, 0.08, "process", randomStream(8));
-    const checked = check(fit(sheltered, series(values), { errors: "both", spread: "proportional" }), {
-      refits: 50,
+    const checked = check(fit(sheltered, series(values), { errors: "both", distribution: "lognormal" }), {
+      resamples: 50,
     });
-    const { refits, unknowns } = checked.groups[0]!.recovery!;
+    const { resamples: refits, parameters: unknowns } = checked.groups[0]!.recovery!;
     expect(refits).toBe(50);
     expect(unknowns.map(({ name }) => name)).toEqual(["R", "K", "process error", "observation error"]);
     for (const { coverage } of unknowns) expect(coverage).toBeGreaterThan(0.7);
@@ -96,7 +96,7 @@ describe("fits that are not of least squares", () => {
 
   test("counts are checked by their residuals, and it is said that intervals were not tried", () => {
     const values = drawn(sheltered, [1.4, 100], 8, 30, 0.05, "observation", randomStream(3)).map(Math.round);
-    const checked = check(fit(sheltered, series(values), { errors: "observation", spread: "poisson" }));
+    const checked = check(fit(sheltered, series(values), { errors: "observation", distribution: "poisson" }));
     expect(checked.groups[0]!.recovery).toBeUndefined();
     expect(checked.sentence).toContain("its intervals were not tried on drawn records");
   });

@@ -17,7 +17,7 @@ const culture = observations(
   { period: "hours", step: { every: 0.5, of: "hour" }, value: "density" },
 );
 const rules = ["N[t+1] = R*N/(1 + (R - 1)*N/K)", "ΔN = r*N*(1 - N/K)"].map((text) => recurrence(text));
-const options = { errors: "observation", spread: "proportional" } as const;
+const options = { errors: "observation", distribution: "lognormal" } as const;
 
 async function textOf(shown: unknown): Promise<string> {
   return String((await bundleOf(shown))?.["text/plain"]);
@@ -38,7 +38,7 @@ test("a check shows its tests, four panels of residuals, recovery and parts of t
 
 test("a comparison shows evidence, what each rule leads to, and forecasts beside naive ones", async () => {
   const fits = rules.map((rule) => fit(rule, culture, options));
-  const compared = compare(fits, { decide: ({ rule }) => `by ${rule.constants.join(" and ")}` });
+  const compared = compare(fits, { decide: ({ rule }) => `by ${rule.parameters.join(" and ")}` });
   const text = await textOf(compared);
   for (const part of [
     compared.sentence,
@@ -58,8 +58,8 @@ test("a proposal shows every rule with its answer", async () => {
 });
 
 test("a search for a break and a test of density dependence show their sentences", async () => {
-  const looked = changePoint(rules[1]!, culture, { spread: "proportional", draws: 99 });
+  const looked = changePoint(rules[1]!, culture, { distribution: "lognormal", resamples: 99 });
   expect(await textOf(looked)).toContain(looked.sentence);
-  const tested = densityDependence(culture, { draws: 199 });
+  const tested = densityDependence(culture, { resamples: 199 });
   expect(await textOf(tested)).toContain(tested.sentence);
 });

@@ -10,7 +10,7 @@ import { series } from "./series.js";
 
 const sheltered = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)");
 const crowding = recurrence("ΔN = r*N*(1 - N/K)");
-const onLog: FitOptions = { errors: "observation", spread: "proportional" };
+const onLog: FitOptions = { errors: "observation", distribution: "lognormal" };
 const off = (value: number, expected: number): number => Math.abs(value / expected - 1);
 
 describe("compare", () => {
@@ -46,7 +46,7 @@ describe("compare", () => {
   });
 
   // Source: the record of C-3, whose first 9 readings end before growth bends: the capacity has no upper limit.
-  test("C-3: says that a rule's constant is not determined by the record", () => {
+  test("C-3: says that a rule's parameter is not determined by the record", () => {
     const fits = [sheltered, crowding].map((rule) => fit(rule, cultureOf(9), onLog));
     expect(compare(fits).rows.find((row) => row.rule === sheltered.text)!.undetermined).toBe(true);
   });
@@ -101,9 +101,9 @@ describe("compare", () => {
 
   test("forecasts of the rule that made the record beat the naive ones and keep their level", () => {
     const values = drawn(sheltered, [1.5, 100], 5, 40, 0.05, "process", randomStream(3));
-    const options = { errors: "process", spread: "proportional" } as const;
+    const options = { errors: "process", distribution: "lognormal" } as const;
     const fits = [sheltered, recurrence("N[t+1] = R*N")].map((rule) => fit(rule, series(values), options));
-    const { scores, forecasts } = compare(fits, { origins: 24, horizon: 3, level: 0.8 }).rollingOrigin!;
+    const { scores, forecasts } = compare(fits, { origins: 24, periods: 3, level: 0.8 }).rollingOrigin!;
     const named = (name: string): (typeof scores)[number] => scores.find((score) => score.name === name)!;
     expect(named(sheltered.text).crps).toBeLessThan(named("no change").crps);
     expect(named(sheltered.text).crps).toBeLessThan(named("last multiplier").crps);

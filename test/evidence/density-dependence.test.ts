@@ -6,7 +6,7 @@ import { series } from "./series.js";
 
 // Source: R 4.2.2, lm(log(x1/x0) ~ x0) on Carlson's yeast; coefficients printed to ten digits.
 test("Y6: the regression of growth on level", () => {
-  const [found] = densityDependence(series(yeast), { draws: 199 }).groups;
+  const [found] = densityDependence(series(yeast), { resamples: 199 }).groups;
   expect(Math.abs(found!.intercept / 0.5217460871 - 1)).toBeLessThan(1e-9);
   expect(Math.abs(found!.slope / -0.0008031497502 - 1)).toBeLessThan(1e-9);
   expect(found!.found).toBe(true);
@@ -20,7 +20,7 @@ test("finds density dependence in 5% of records that grow by chance alone", () =
   for (let k = 0; k < 400; k++) {
     const values = [50];
     for (let t = 1; t < 25; t++) values.push(values[t - 1]! * Math.exp(0.2 * stream.normal()));
-    const [group] = densityDependence(series(values), { draws: 199, seed: k }).groups;
+    const [group] = densityDependence(series(values), { resamples: 199, seed: k }).groups;
     if (group!.found) found++;
     // t(22) at 5%, one-sided.
     if (group!.statistic < -1.717) byTable++;

@@ -4,7 +4,7 @@ import { compileRule, type Rule } from "../../src/rule/index.js";
 /** A record of a rule of one state with lognormal errors of the kind, drawn apart from the code that is tested. */
 export function drawn(
   rule: Rule,
-  constants: readonly number[],
+  parameters: readonly number[],
   initial: number,
   length: number,
   sd: number,
@@ -13,7 +13,7 @@ export function drawn(
 ): Float64Array {
   const { step } = compileRule(rule);
   const state = Float64Array.of(initial);
-  const given = Float64Array.from(constants);
+  const given = Float64Array.from(parameters);
   const values = new Float64Array(length);
   for (let t = 0; t < length; t++) {
     if (t > 0) step(state, given, [], t - 1, state);

@@ -8,12 +8,12 @@ import { series } from "./series.js";
 
 // Source: closed form of a log-linear record, sd_h = s sqrt(h + h^2/n), for g = .03, s = .06, n = 24 increments; printed
 // to 6 decimals.
-test("G-9: predictive deviations carry the uncertainty of the constant and of every step", () => {
+test("G-9: predictive deviations carry the uncertainty of the parameter and of every step", () => {
   const away = 0.06 * Math.sqrt(23 / 24);
   const logs = [0];
   for (let t = 1; t <= 24; t++) logs.push(logs[t - 1]! + 0.03 + (t % 2 === 0 ? away : -away));
   const record = series(logs.map(Math.exp));
-  const fitted = fit(recurrence("N[t+1] = R*N"), record, { errors: "process", spread: "proportional" });
+  const fitted = fit(recurrence("N[t+1] = R*N"), record, { errors: "process", distribution: "lognormal" });
   const ahead = predictAhead(fitted, fitted.groups[0]!, record.groups[0]!, 12)!;
   for (const [h, expected] of [
     [1, 0.061237],
@@ -28,17 +28,17 @@ test("G-9: predictive deviations carry the uncertainty of the constant and of ev
 test("errors of steps are carried along a rule that bends", () => {
   const rule = recurrence("N[t+1] = N*exp(r*(1 - N/K))");
   const record = series(drawn(rule, [0.6, 100], 10, 200, 0.05, "process", randomStream(4)));
-  const fitted = fit(rule, record, { errors: "process", spread: "proportional" });
+  const fitted = fit(rule, record, { errors: "process", distribution: "lognormal" });
   const [group] = fitted.groups;
   const ahead = predictAhead(fitted, group!, record.groups[0]!, 4)!;
   const { step } = compileRule(rule);
-  const constants = Float64Array.from(rule.constants, (name) => group!.constants[name]!);
+  const parameters = Float64Array.from(rule.parameters, (name) => group!.parameters[name]!);
   const stream = randomStream(9);
   const last = record.groups[0]!.values["N"]!.at(-1)!;
   const ends = Array.from({ length: 20_000 }, () => {
     const state = Float64Array.of(last);
     for (let t = 0; t < 4; t++) {
-      step(state, constants, [], t, state);
+      step(state, parameters, [], t, state);
       state[0] = state[0]! * Math.exp(group!.sigma * stream.normal());
     }
     return Math.log(state[0]!);

@@ -19,10 +19,10 @@ describe("propose", () => {
   // 8 records a rule, which the seed fixes; 1,000 of each in the benchmark.
   test("calls the rule that made a record supported in nine of ten", () => {
     const stream = randomStream(6);
-    const found = truths.flatMap(([name, rule, constants, first]) =>
+    const found = truths.flatMap(([name, rule, parameters, first]) =>
       Array.from({ length: 8 }, (_, k) => {
         const errors = k % 2 === 0 ? "process" : "observation";
-        const { verdict } = propose(series(drawn(rule, constants, first, 30, 0.1, errors, stream)));
+        const { verdict } = propose(series(drawn(rule, parameters, first, 30, 0.1, errors, stream)));
         return verdict.rules.includes(name);
       }),
     );

@@ -6,9 +6,9 @@ import {
   forecast,
   observations,
   openCase,
-  reaches,
   readRecord,
   recurrence,
+  timeToReach,
 } from "../../kernel-helpers/index.js";
 import { yeast } from "../published/carlson-yeast.js";
 
@@ -39,7 +39,7 @@ async function make(): Promise<Readonly<Record<string, unknown>>> {
   const shelteredFit = fit(sheltered, counts, { errors: "observation" });
   const fitted = shelteredFit;
   const ahead = forecast(fitted, { periods: 12 });
-  const ready = reaches(ahead, { value: 600, direction: "rising" });
+  const ready = timeToReach(ahead, { value: 600, direction: "rising" });
   return {
     readings,
     counts,

@@ -100,13 +100,13 @@ export const figuresOfEveryKind: Readonly<Record<string, Figure>> = {
     equilibria: [{ value: 150, stable: true }],
   }),
   profile: profileFigure({
-    title: "Profiles of the constants",
+    title: "Profiles of the parameters",
     measure: "Rise of the sum of squares / sigma²",
     cut: 4.8,
     level: "95%",
     profiles: [
       {
-        constant: "r",
+        parameter: "r",
         unit: "per h",
         held: fine.map((i) => i / 1000),
         worsening: fine.map((i) => (i - 60) ** 2 / 400),
@@ -115,7 +115,7 @@ export const figuresOfEveryKind: Readonly<Record<string, Figure>> = {
         upper: 0.104,
       },
       {
-        constant: "K",
+        parameter: "K",
         unit: "10^4 cells/mL",
         held: fine,
         worsening: fine.map((i) => (i < 80 ? (i - 80) ** 2 / 300 : 3)),
@@ -153,8 +153,8 @@ export const figuresOfEveryKind: Readonly<Record<string, Figure>> = {
     answer: { title: "Change of the hour", unit: "h" },
     by: "one standard error",
     changes: [
-      { constant: "R", lowered: 3.2, raised: -2.9 },
-      { constant: "K", lowered: 8.1, raised: -4.4 },
+      { parameter: "R", lowered: 3.2, raised: -2.9 },
+      { parameter: "K", lowered: 8.1, raised: -4.4 },
     ],
   }),
   "few multiples": smallMultiples({

@@ -3,7 +3,7 @@ import type { DrawnProfile } from "../../kernel-helpers/figures/index.js";
 import { smoothProfile } from "../../kernel-helpers/figures/smooth-profile.js";
 
 const parabola: DrawnProfile = {
-  constant: "r",
+  parameter: "r",
   unit: "",
   held: [-2, -1, 0, 1, 2],
   worsening: [4, 1, 0, 1, 4],
@@ -13,7 +13,7 @@ const parabola: DrawnProfile = {
 };
 
 describe("smoothProfile", () => {
-  test("draws the parabola of a linear constant exactly, from five places of it", () => {
+  test("draws the parabola of a linear parameter exactly, from five places of it", () => {
     // Source: in a linear least-squares problem the profile is a parabola (Bates and Watts 1988, section 6.1).
     const { x, y } = smoothProfile(parabola, 10);
     expect(x.length).toBeGreaterThan(40);

@@ -8,8 +8,8 @@ const readings = [10.1, 13.4, 18.9, 24.3, 32.2, 40.5, 50.1, 58.2, 67.9, 74.8, 81
 function growth([capacity, middle, width]: ArrayLike<number> & Iterable<number>, t: number): number {
   return capacity! / (1 + Math.exp((middle! - t) / width!));
 }
-const residuals = (constants: Float64Array): number[] =>
-  readings.map((reading, t) => reading - growth(constants, t));
+const residuals = (parameters: Float64Array): number[] =>
+  readings.map((reading, t) => reading - growth(parameters, t));
 const start = [80, 5, 3];
 
 function close(a: ArrayLike<number | undefined>, b: ArrayLike<number | undefined>, tolerance: number): void {
@@ -44,7 +44,7 @@ describe("leastSquares", () => {
     close(exact.standardErrors, plain.standardErrors, 1e-9);
   });
 
-  test("does not depend on the units of responses and constants", () => {
+  test("does not depend on the units of responses and parameters", () => {
     const powers = fc.integer({ min: -9, max: 9 }).map((power) => 10 ** power);
     fc.assert(
       fc.property(powers, powers, powers, (ofReadings, ofTime, ofStart) => {
@@ -64,14 +64,14 @@ describe("leastSquares", () => {
     );
   });
 
-  test("does not depend on the order of the rows or of the constants", () => {
+  test("does not depend on the order of the rows or of the parameters", () => {
     const rows = fc.shuffledSubarray(periods, { minLength: periods.length });
     const places = fc.shuffledSubarray([0, 1, 2], { minLength: 3 });
     fc.assert(
       fc.property(rows, places, (order, place) => {
         const shuffled = leastSquares({
-          residuals: (constants) => {
-            const named = Float64Array.from([0, 1, 2], (i) => constants[place.indexOf(i)]!);
+          residuals: (parameters) => {
+            const named = Float64Array.from([0, 1, 2], (i) => parameters[place.indexOf(i)]!);
             const all = residuals(named);
             return order.map((row) => all[row]!);
           },
@@ -96,7 +96,7 @@ describe("leastSquares", () => {
     const bounded = leastSquares({ residuals, start, upper: [90, 20, 20], lower: [0, 0, 0.1] });
     expect(bounded.estimates[0]).toBe(90);
     expect(bounded.stop.kind).toBe("converged");
-    // With the capacity held at its bound, the others are those of the problem in two constants.
+    // With the capacity held at its bound, the others are those of the problem in two parameters.
     const held = leastSquares({
       residuals: ([b, c]) => residuals(Float64Array.of(90, b!, c!)),
       start: [5, 3],
@@ -109,7 +109,7 @@ describe("leastSquares", () => {
     close(from.estimates, plain.estimates, 1e-8);
   });
 
-  test("says which constants are not determined, and makes no number up for them", () => {
+  test("says which parameters are not determined, and makes no number up for them", () => {
     const product = leastSquares({
       residuals: ([a, b, c]) => readings.map((reading, t) => reading - a! * b! * t - c!),
       start: [1, 2, 3],
@@ -142,7 +142,7 @@ describe("leastSquares", () => {
     [{ residuals: () => [1], start: [1, 2] }, "too-few-residuals"],
     [{ residuals: () => [1, 2], start: [Number.NaN] }, "bad-start"],
     [{ residuals: () => [1, 2], start: [1], lower: [2], upper: [1] }, "bad-bounds"],
-    [{ residuals: () => [1, 2], start: [1], lower: [2, 3] }, "other-number-of-constants"],
+    [{ residuals: () => [1, 2], start: [1], lower: [2, 3] }, "other-number-of-parameters"],
     [{ residuals: () => [1, 2], start: [1], jacobian: () => [1] }, "jacobian-of-other-shape"],
   ])("refuses a problem that cannot be meant: %#", (problem, code) => {
     expect(() => leastSquares(problem)).toThrow(expect.objectContaining({ name: "ModelError", code }));

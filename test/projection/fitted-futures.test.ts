@@ -43,7 +43,7 @@ test("a state-space fit goes on from its filtered state with both errors", () =>
   const band = ahead.groups[0]!.states[0]!.bands.find((each) => each.kind === "future observation")!;
   for (const h of [1, 3, 6]) {
     // Source: prediction by the Kalman filter: mean a^h m + b(1-a^h)/(1-a), variance a^(2h) P + q^2 (1-a^(2h))/(1-a^2) + r^2 (Durbin
-    // and Koopman, Time Series Analysis by State Space Methods, section 4.11; from memory). Constants are given, so exact but
+    // and Koopman, Time Series Analysis by State Space Methods, section 4.11; from memory). Parameters are given, so exact but
     // for 4.5 Monte-Carlo errors of a decile.
     const power = 0.8 ** (2 * h);
     const sd = Math.sqrt(power * variance + (q * q * (1 - power)) / (1 - 0.64) + r * r);
@@ -78,14 +78,14 @@ describe("a rule with an input", () => {
       scenarios: { usual: { rain: 4 }, "a dry third week": { rain: { usual: 4, at: { 3: 0 } } } },
     });
     const [usual, dry] = ahead.groups;
-    const { keep, gain } = fitted.groups[0]!.constants as { keep: number; gain: number };
+    const { keep, gain } = fitted.groups[0]!.parameters as { keep: number; gain: number };
     let level = stored.at(-1)!;
     for (let h = 1; h <= 4; h++) {
       level = keep * level + 4 * gain;
       expect(usual!.states[0]!.central[h]).toBeCloseTo(level, 10);
     }
     for (let path = 0; path < 200; path++) {
-      const [a, b] = [usual!.draws.future[0]!, dry!.draws.future[0]!];
+      const [a, b] = [usual!.ensemble.future[0]!, dry!.ensemble.future[0]!];
       expect(b[path * 5 + 2]).toBe(a[path * 5 + 2]);
       expect(b[path * 5 + 3]).toBeLessThan(a[path * 5 + 3]!);
     }
@@ -97,7 +97,7 @@ test("a rule with a lag goes on from the last recorded values, not from the last
   for (let t = 2; t < 24; t++)
     values.push(0.5 * values[t - 1]! + 0.4 * values[t - 2]! + 1.5 + 0.3 * Math.sin(3 * t));
   const fitted = fit(recurrence("x[t+1] = a*x + c*x[t-1] + b"), record({ x: values }), { errors: "process" });
-  const { a, b, c } = fitted.groups[0]!.constants as { a: number; b: number; c: number };
+  const { a, b, c } = fitted.groups[0]!.parameters as { a: number; b: number; c: number };
   const { central } = forecast(fitted, { periods: 2, paths: 20 }).groups[0]!.states[0]!;
   const first = a * values[23]! + c * values[22]! + b;
   expect(central[0]).toBe(values[23]);
@@ -115,7 +115,7 @@ test("a horizon longer than the record is said to be conditional", () => {
   );
 });
 
-test("bands are nested around the median, whatever the rule's constants and noise", () => {
+test("bands are nested around the median, whatever the rule's parameters and noise", () => {
   fc.assert(
     fc.property(
       fc.double({ min: -0.9, max: 1.1, noNaN: true }),
@@ -124,10 +124,10 @@ test("bands are nested around the median, whatever the rule's constants and nois
       fc.integer({ min: 0, max: 1e6 }),
       (a, b, sd, seed) => {
         const [state] = simulate(recurrence("x[t+1] = a*x + b"), {
-          constants: { a, b },
+          parameters: { a, b },
           initial: { x: 3 },
           periods: 4,
-          noise: { x: { kind: "additive", sd } },
+          noise: { x: { distribution: "normal", sd } },
           paths: 61,
           seed,
         }).groups[0]!.states;

@@ -32,7 +32,7 @@ describe("log-linear growth from 24 increments", () => {
     recordOf(logs.map(Math.exp)),
     {
       errors: "process",
-      spread: "proportional",
+      distribution: "lognormal",
     },
   );
   const ahead = forecast(fitted, { periods: 12, paths, seed: 9, levels: [0.8] });
@@ -52,12 +52,12 @@ describe("log-linear growth from 24 increments", () => {
       upper: band.upper.map(Math.log),
     }));
     const widened = studentQuantile(0.9, n - 1) / normalQuantile(0.9);
-    const constants = Math.sqrt(predictive ** 2 - process ** 2);
+    const parameters = Math.sqrt(predictive ** 2 - process ** 2);
     expect(spread(logged, "future observation", h) / (predictive * widened)).toBeCloseTo(1, 1.5);
-    expect(spread(logged, "mean path", h) / (constants * widened)).toBeCloseTo(1, 1.5);
+    expect(spread(logged, "mean path", h) / (parameters * widened)).toBeCloseTo(1, 1.5);
   });
 
-  test("bands without the constants' error are too narrow by 18% at 12 periods", () => {
+  test("bands without the parameters' error are too narrow by 18% at 12 periods", () => {
     // Source: .207846/.254558 = 0.8165, that is 18% narrower; with the error of s as well it is a little more.
     expect(1 - 0.207846 / 0.254558).toBeCloseTo(0.18, 2);
     const logged = bands.map((band) => ({
@@ -77,10 +77,10 @@ test("a chaotic fit gives the share of positive exponents, ends its path at the 
     values.push(last * Math.exp(2.9 * (1 - last / 100) + 0.15 * Math.sin(1 + 5 * t)));
   }
   const rule = recurrence("N[t+1] = N*exp(r*(1 - N/K))");
-  const fitted = fit(rule, { ...recordOf(values) }, { errors: "process", spread: "proportional" });
+  const fitted = fit(rule, { ...recordOf(values) }, { errors: "process", distribution: "lognormal" });
   const ahead = forecast(fitted, { periods: 40, paths: 1000 });
   const [group] = ahead.groups;
-  const { chaotic, horizon, longRun } = group!.predictability!;
+  const { chaotic, predictionHorizon: horizon, longRun } = group!.predictability!;
   expect(chaotic).toBeGreaterThan(0.5);
   expect(horizon).toBeGreaterThanOrEqual(1);
   expect(horizon).toBeLessThan(20);
@@ -97,10 +97,10 @@ test("a chaotic fit gives the share of positive exponents, ends its path at the 
 test("growth without bound is not called chaos", () => {
   const fitted = fit(recurrence("x[t+1] = R*x"), recordOf([1, 1.32, 1.68, 2.2, 2.9, 3.6, 4.9, 6.1]), {
     errors: "process",
-    spread: "proportional",
+    distribution: "lognormal",
   });
   const [group] = forecast(fitted, { periods: 5, paths: 200 }).groups;
-  expect(group!.predictability!.exponent).toBeGreaterThan(0);
+  expect(group!.predictability!.lyapunovExponent).toBeGreaterThan(0);
   expect(group!.predictability!.chaotic).toBe(0);
 });
 
@@ -114,7 +114,7 @@ describe("a record that does not determine the capacity", () => {
   const rule = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)", {
     bounds: { R: [1, Infinity], K: [0, Infinity] },
   });
-  const fitted = fit(rule, recordOf(values), { errors: "observation", spread: "proportional" });
+  const fitted = fit(rule, recordOf(values), { errors: "observation", distribution: "lognormal" });
 
   test("is projected by draws along its profile, and the share left open is the profile's", () => {
     const K = fitted.groups[0]!.estimates.find((each) => each.name === "K")!;
@@ -122,7 +122,7 @@ describe("a record that does not determine the capacity", () => {
     const ahead = forecast(fitted, { periods: 30, paths: 4000, levels: [0.95] });
     const [group] = ahead.groups;
     expect(group!.warnings[0]!.message).toMatch(
-      /does not determine K.*: constants were drawn along the profile of K/,
+      /does not determine K.*: parameters were drawn along the profile of K/,
     );
     const { bands } = group!.states[0]!;
     const mean = bands.find((band) => band.kind === "mean path")!;

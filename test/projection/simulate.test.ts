@@ -17,10 +17,10 @@ test("an affine rule with normal noise meets its exact predictive distribution a
   // 3.2 (from memory). Tolerance: four and a half Monte-Carlo errors, over 20 periods x 7 numbers.
   const [a, b, x0, sd] = [0.8, 30, 100, 4];
   const found = simulate(recurrence("x[t+1] = a*x + b"), {
-    constants: { a, b },
+    parameters: { a, b },
     initial: { x: x0 },
     periods: 20,
-    noise: { x: { kind: "additive", sd } },
+    noise: { x: { distribution: "normal", sd } },
     paths,
     seed: 11,
   });
@@ -44,15 +44,15 @@ test("a lognormal multiplier of mean 1 grows by E ln R, not by ln E R", () => {
   // (from memory). The mean of x_T stays R^T x_0.
   const [R, sd, periods] = [1.02, 0.3, 25];
   const found = simulate(recurrence("x[t+1] = R*x"), {
-    constants: { R },
+    parameters: { R },
     initial: { x: 1 },
     periods,
-    noise: { x: { kind: "lognormal", sd } },
+    noise: { x: { distribution: "lognormal", sd, centre: "mean" } },
     paths,
     seed: 5,
   });
   const logs = Array.from({ length: paths }, (_, k) =>
-    Math.log(found.groups[0]!.draws.future[0]![k * (periods + 1) + periods]!),
+    Math.log(found.groups[0]!.ensemble.future[0]![k * (periods + 1) + periods]!),
   );
   const mean = logs.reduce((sum, value) => sum + value, 0) / paths / periods;
   const error = (sd * Math.sqrt(periods)) / periods / Math.sqrt(paths);
@@ -72,10 +72,10 @@ test("a lognormal multiplier of mean 1 grows by E ln R, not by ln E R", () => {
 test("a walk in unit normal steps passes a level by n with the exact probability of a small case", () => {
   // P(no passage of 0 from 1 in one step) = Phi(1); watched passages and kept paths tell the same.
   const found = simulate(recurrence("x[t+1] = x + c"), {
-    constants: { c: 0 },
+    parameters: { c: 0 },
     initial: { x: 1 },
     periods: 1,
-    noise: { x: { kind: "additive", sd: 1 } },
+    noise: { x: { distribution: "normal", sd: 1 } },
     paths,
     watch: [{ value: 0, direction: "falling" }],
   });
@@ -85,22 +85,27 @@ test("a walk in unit normal steps passes a level by n with the exact probability
 });
 
 test.each([
-  ["poisson", { kind: "poisson" } as const, 60, 60],
-  ["poisson of a small mean", { kind: "poisson" } as const, 3, 3],
-  ["negative binomial", { kind: "negative-binomial", size: 4 } as const, 12, 12 + 144 / 4],
-  ["demographic", { kind: "demographic", variance: 2 } as const, 50, 100],
-  ["lognormal", { kind: "lognormal", sd: 0.4 } as const, 10, 100 * (Math.exp(0.16) - 1)],
+  ["poisson", { distribution: "poisson" } as const, 60, 60],
+  ["poisson of a small mean", { distribution: "poisson" } as const, 3, 3],
+  ["negative binomial", { distribution: "negative-binomial", size: 4 } as const, 12, 12 + 144 / 4],
+  ["demographic", { distribution: "demographic", variance: 2 } as const, 50, 100],
+  [
+    "lognormal",
+    { distribution: "lognormal", sd: 0.4, centre: "mean" } as const,
+    10,
+    100 * (Math.exp(0.16) - 1),
+  ],
 ])("noise of family %s has the mean and the variance of its distribution", (_, noise, mean, variance) => {
   // Source: moments of the named distributions (Johnson, Kotz and Kemp, Univariate Discrete Distributions; from memory).
   const found = simulate(recurrence("x[t+1] = m"), {
-    constants: { m: mean },
+    parameters: { m: mean },
     initial: { x: mean },
     periods: 1,
     noise: { x: noise },
     paths,
     seed: 3,
   });
-  const values = Array.from({ length: paths }, (_, k) => found.groups[0]!.draws.future[0]![2 * k + 1]!);
+  const values = Array.from({ length: paths }, (_, k) => found.groups[0]!.ensemble.future[0]![2 * k + 1]!);
   const average = values.reduce((sum, value) => sum + value, 0) / paths;
   const square = values.reduce((sum, value) => sum + (value - average) ** 2, 0) / (paths - 1);
   expect(Math.abs(average - mean)).toBeLessThan(4.5 * Math.sqrt(variance / paths));
@@ -111,8 +116,8 @@ test.each([
 test("more periods leave the earlier numbers as they are, and more paths the earlier whole blocks", () => {
   const rule = recurrence("x[t+1] = 0.9*x");
   const run = (periods: number, paths: number) =>
-    simulate(rule, { initial: { x: 1 }, periods, paths, noise: { x: { kind: "additive", sd: 1 } } })
-      .groups[0]!.draws.future[0]!;
+    simulate(rule, { initial: { x: 1 }, periods, paths, noise: { x: { distribution: "normal", sd: 1 } } })
+      .groups[0]!.ensemble.future[0]!;
   const small = run(5, 1500);
   const long = run(9, 1500);
   const many = run(5, 4000);
@@ -132,14 +137,14 @@ test("schedules and one-off events reach the periods they name, and scenarios sh
       missed: { payment: { usual: 100, from: { 4: 150 }, at: { 2: 0 } } },
       listed: { payment: [0, 1, 2, 3, 4, 5, 6] },
     },
-    noise: { owed: { kind: "additive", sd: 1 } },
+    noise: { owed: { distribution: "normal", sd: 1 } },
     paths: 50,
   });
   const central = found.groups.map((group) => group.states[0]!.central);
   expect(central[0]).toEqual([1000, 900, 800, 700, 600, 500, 400]);
   expect(central[1]).toEqual([1000, 900, 900, 800, 650, 500, 350]);
   expect(central[2]).toEqual([1000, 999, 997, 994, 990, 985, 979]);
-  const [usual, missed] = found.groups.map((group) => group.draws.future[0]!);
+  const [usual, missed] = found.groups.map((group) => group.ensemble.future[0]!);
   for (let path = 0; path < 50; path++)
     expect(missed![path * 7 + 3]! - usual![path * 7 + 3]!).toBeCloseTo(100, 9);
 });
@@ -147,7 +152,7 @@ test("schedules and one-off events reach the periods they name, and scenarios sh
 test("a path that leaves the range of a state stops, and it is said at which period", () => {
   // DOMAIN of the trade, common practice: "Period 17: the rule gives -3.2; projection stopped at period 16."
   const rule = recurrence("B[t+1] = B - C", { bounds: { B: [0, Infinity] } });
-  const found = simulate(rule, { constants: { C: 30 }, initial: { B: 100 }, periods: 6 });
+  const found = simulate(rule, { parameters: { C: 30 }, initial: { B: 100 }, periods: 6 });
   expect(found.groups[0]!.states[0]!.central).toEqual([100, 70, 40, 10, Number.NaN, Number.NaN, Number.NaN]);
   expect(found.groups[0]!.warnings.map((w) => w.message)).toEqual([
     "Period 4: the rule gives B = -20; the path without random change stops at period 3.",
@@ -160,7 +165,7 @@ test("a run says how far it is, and ends where it is told to", () => {
     simulate(recurrence("x[t+1] = 0.9*x"), {
       initial: { x: 1 },
       periods: 9,
-      noise: { x: { kind: "additive", sd: 1 } },
+      noise: { x: { distribution: "normal", sd: 1 } },
       paths: 3000,
       onProgress: (done, of) => {
         told.push(done / of);
@@ -197,7 +202,7 @@ test("what cannot be run is refused in a whole sentence", () => {
   expect(run({ inputs: { payment: 1 }, levels: [95] })).toThrow(
     "A band has a level between 0 and 1, such as 0.95; 95 was given.",
   );
-  expect(run({ inputs: { payment: 1 }, noise: { owed: { kind: "additive", sd: -1 } } })).toThrow(
+  expect(run({ inputs: { payment: 1 }, noise: { owed: { distribution: "normal", sd: -1 } } })).toThrow(
     "The random change of owed cannot be drawn: its sd is -1, which is not positive.",
   );
   expect(run({ inputs: { payment: 1 }, scenarios: { a: { payment: 1 } } })).toThrow(

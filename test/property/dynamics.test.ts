@@ -5,9 +5,9 @@ import {
   closedFormAt,
   cycles,
   equilibria,
-  exactPath,
+  exactTrajectory,
   guaranteedDigits,
-  path,
+  trajectory,
 } from "../../src/dynamics/index.js";
 import { recurrence, rules } from "../../src/rule/index.js";
 import { expressionText } from "./arbitraries/rule-text.js";
@@ -22,12 +22,12 @@ test("going m + k periods is going m and then k, bit for bit", () => {
     fc.property(expressionText(false), between(-5, 5), whole, whole, (text, start, m, k) => {
       const one = text.replace(/P(\[t-2\])?|N\[t-1\]|\bu\b(\[t\+1\])?/gu, "N");
       const rule = recurrence(`ΔN = ${one} + 0*r*K`);
-      const options = { constants: { r: 0.75, K: 1.5 } };
-      const together = path(rule, { ...options, initial: { N: start }, periods: m + k });
-      const first = path(rule, { ...options, initial: { N: start }, periods: m });
+      const options = { parameters: { r: 0.75, K: 1.5 } };
+      const together = trajectory(rule, { ...options, initial: { N: start }, periods: m + k });
+      const first = trajectory(rule, { ...options, initial: { N: start }, periods: m });
       if (first.stop.kind !== "complete") return;
       const initial = { N: first.values["N"]!.at(-1)! };
-      const second = path(rule, { ...options, initial, from: m, periods: k });
+      const second = trajectory(rule, { ...options, initial, startsAt: m, periods: k });
       expect([...second.values["N"]!]).toEqual([...together.values["N"]!.subarray(m)]);
       expect(second.stop.kind).toBe(together.stop.kind);
     }),
@@ -43,7 +43,7 @@ test("rest levels stay put to 1e-12 of their size, and a polynomial's are all fo
       const [b, d] = [a + first, a + first + second];
       const sorted = [a, b, d];
       const rule = recurrence("ΔN = c*(N - a)*(N - b)*(N - d)");
-      const found = equilibria(rule, { constants: { a, b, c, d }, within: [-100, 100] });
+      const found = equilibria(rule, { parameters: { a, b, c, d }, range: [-100, 100] });
       expect(found.points).toHaveLength(3);
       found.points.forEach((point, i) => {
         expect(Math.abs(point.at["N"]! - sorted[i]!)).toBeLessThan(1e-10 * 100);
@@ -60,7 +60,7 @@ test("a cycle's multiplier is the product of the slopes along it", () => {
   void fc.assert(
     fc.property(between(3.1, 4), fc.integer({ min: 1, max: 4 }), (r, period) => {
       const rule = recurrence("x[t+1] = r*x*(1 - x)");
-      for (const cycle of cycles(rule, { constants: { r }, period, within: [0, 1] }).cycles) {
+      for (const cycle of cycles(rule, { parameters: { r }, period, range: [0, 1] }).cycles) {
         const product = cycle.points.reduce((slope, x) => slope * r * (1 - 2 * x), 1);
         expect(Math.abs(cycle.multiplier.re - product)).toBeLessThanOrEqual(
           1e-9 * Math.max(1, Math.abs(product)),
@@ -76,10 +76,10 @@ test("the closed form of a linear rule is its exact path, whatever its roots", (
   void fc.assert(
     fc.property(small, small, small, small, fc.tuple(small, small, small), (a, b, c, added, start) => {
       const rule = recurrence("x[t+1] = a*x + b*x[t-1] + c*x[t-2] + d");
-      const constants = { a, b, c, d: added };
+      const parameters = { a, b, c, d: added };
       const initial = { x: start };
-      const form = closedForm(rule, { constants, initial });
-      const exact = exactPath(rule, { constants, initial, periods: 12 }).numbers["x"]!;
+      const form = closedForm(rule, { parameters, initial });
+      const exact = exactTrajectory(rule, { parameters, initial, periods: 12 }).numbers["x"]!;
       const scale = Math.max(1, ...exact.map(Math.abs));
       exact.forEach((value, t) => {
         // Rounding grows with the largest root to the power t and the closeness of the roots.
@@ -94,10 +94,10 @@ test("the closed form of a linear rule is its exact path, whatever its roots", (
 test("iteration and closed form agree to the stated number of digits, to the stated period", () => {
   void fc.assert(
     fc.property(between(1.05, 4), between(1, 1e4), between(0.001, 2), (R, K, part) => {
-      const options = { constants: { R, K }, initial: { N: part * K } };
+      const options = { parameters: { R, K }, initial: { N: part * K } };
       const { periods, digits } = guaranteedDigits(rules.bevertonHolt(), { ...options, periods: 60 });
       const form = closedForm(rules.bevertonHolt(), options);
-      const run = path(rules.bevertonHolt(), { ...options, periods });
+      const run = trajectory(rules.bevertonHolt(), { ...options, periods });
       run.values["N"]!.forEach((value, t) => {
         expect(Math.abs(closedFormAt(form, t)["N"]! / value - 1)).toBeLessThanOrEqual(10 ** -digits);
       });
@@ -111,10 +111,10 @@ test("digits that are guaranteed are right, chaos or not", () => {
   void fc.assert(
     fc.property(fc.integer({ min: 20, max: 40 }), fc.integer({ min: 1, max: 9 }), (tenths, start) => {
       const rule = recurrence("x[t+1] = r*x*(1 - x)");
-      const options = { constants: { r: tenths / 10 }, initial: { x: start / 10 } };
+      const options = { parameters: { r: tenths / 10 }, initial: { x: start / 10 } };
       const { periods } = guaranteedDigits(rule, { ...options, digits: 11, periods: 9 });
-      const exact = exactPath(rule, { ...options, periods }).numbers["x"]!;
-      const stepped = path(rule, { ...options, periods }).values["x"]!;
+      const exact = exactTrajectory(rule, { ...options, periods }).numbers["x"]!;
+      const stepped = trajectory(rule, { ...options, periods }).values["x"]!;
       exact.forEach((value, t) => {
         expect(Math.abs(stepped[t]! - value)).toBeLessThanOrEqual(1e-11 * Math.abs(value));
       });

@@ -19,8 +19,8 @@ test("reading a printed rule gives the same rule", () => {
       const values = [rule, again].map((one) => {
         const next = new Float64Array(one.states.length + one.memory.length);
         const state = new Float64Array(next.length).fill(1.25);
-        const constants = new Float64Array(one.constants.length).fill(0.75);
-        compileRule(one).step(state, constants, [Float64Array.of(1, 2, 3)], 1, next);
+        const parameters = new Float64Array(one.parameters.length).fill(0.75);
+        compileRule(one).step(state, parameters, [Float64Array.of(1, 2, 3)], 1, next);
         return next;
       });
       expect(values[0]).toEqual(values[1]);
@@ -34,16 +34,16 @@ test("generated code and interpreter give the same bits, values and sensitivitie
     fc.property(ruleSource(false), states, positive, positive, (text, start, r, K) => {
       const rule = recurrence(text, { inputs: ["u"] });
       const width = rule.states.length + rule.memory.length;
-      const unknowns = rule.constants.length + width;
-      const constants = Float64Array.from(rule.constants, (name) => (name === "r" ? r : K));
+      const unknowns = rule.parameters.length + width;
+      const parameters = Float64Array.from(rule.parameters, (name) => (name === "r" ? r : K));
       const initial = Float64Array.from(start.slice(0, width));
       const results = [compileRule(rule), interpretRule(rule)].map((compiled) => {
         const values = new Float64Array(5 * width);
         const table = new Float64Array(5 * width * unknowns);
         const plain = new Float64Array(5 * width);
         const inputs = [Float64Array.of(0.5, 1, 1.5, 2, 2.5, 3)];
-        compiled.pathWithSensitivities(initial, constants, inputs, 0, 4, values, table);
-        compiled.path(initial, constants, inputs, 0, 4, plain);
+        compiled.pathWithSensitivities(initial, parameters, inputs, 0, 4, values, table);
+        compiled.path(initial, parameters, inputs, 0, 4, plain);
         expect(plain).toEqual(values);
         return { values, table };
       });
@@ -64,7 +64,7 @@ test("many paths abreast take the same steps as each alone", () => {
       const width = rule.states.length + rule.memory.length;
       const inputs = [Float64Array.of(0.5, 1, 1.5, 2)];
       const own = [1, 1.5, 0.5].map((k) =>
-        Float64Array.from(rule.constants, (name) => k * (name === "r" ? r : K)),
+        Float64Array.from(rule.parameters, (name) => k * (name === "r" ? r : K)),
       );
       const states3 = own.map((_, k) => Float64Array.from(start.slice(0, width), (value) => value + 0.1 * k));
       const limits = Float64Array.of(-100, 100, -100, 100);
@@ -75,9 +75,9 @@ test("many paths abreast take the same steps as each alone", () => {
         compiled.advanceEach(each, 0, 3, flat(own), inputs, 1, limits);
         const shared = flat(states3);
         compiled.advance(shared, 1, 3, own[0]!, inputs, 1, limits);
-        const alone = (k: number, constants: Float64Array): Float64Array => {
+        const alone = (k: number, parameters: Float64Array): Float64Array => {
           const next = new Float64Array(width);
-          compileRule(rule).step(states3[k]!, constants, inputs, 1, next);
+          compileRule(rule).step(states3[k]!, parameters, inputs, 1, next);
           const outside = next.subarray(0, 2).some((value) => !(Math.abs(value) <= 100));
           return outside ? next.fill(Number.NaN) : next;
         };
@@ -98,12 +98,12 @@ test("paths of one state abreast take the same steps, and end where they are not
     fc.property(expressionText(false), starts, fc.constantFrom(Number.MAX_VALUE, 50), (text, from, limit) => {
       const one = text.replace(/P(\[t-2\])?|N\[t-1\]|\bu\b(\[t\+1\])?/gu, "N");
       const compiled = compileRule(recurrence(`N[t+1] = ${one} + 0*r*K + 0*N`));
-      const constants = Float64Array.of(0.75, 0.75);
+      const parameters = Float64Array.of(0.75, 0.75);
       const present = Float64Array.from(from);
-      compiled.advance(present, 0, from.length, constants, [], 3, Float64Array.of(-limit, limit));
+      compiled.advance(present, 0, from.length, parameters, [], 3, Float64Array.of(-limit, limit));
       const alone = Float64Array.from(from, (value) => {
         const state = Float64Array.of(value);
-        compiled.step(state, constants, [], 3, state);
+        compiled.step(state, parameters, [], 3, state);
         return Math.abs(state[0]!) <= limit ? state[0]! : Number.NaN;
       });
       expect(present).toEqual(alone);
@@ -118,16 +118,16 @@ test("sensitivities agree with differences of paths", () => {
     fc.property(ruleSource(true), states, positive, positive, (text, start, r, K) => {
       const rule = recurrence(text, { inputs: ["u"] });
       const width = rule.states.length + rule.memory.length;
-      const unknowns = rule.constants.length + width;
-      const at = [...rule.constants.map((name) => (name === "r" ? r : K)), ...start.slice(0, width)];
+      const unknowns = rule.parameters.length + width;
+      const at = [...rule.parameters.map((name) => (name === "r" ? r : K)), ...start.slice(0, width)];
       const inputs = [Float64Array.of(0.5, 1, 1.5, 2)];
       const run = (point: readonly number[], table?: Float64Array): Float64Array => {
         const values = new Float64Array(3 * width);
-        const constants = Float64Array.from(point.slice(0, rule.constants.length));
-        const initial = Float64Array.from(point.slice(rule.constants.length));
+        const parameters = Float64Array.from(point.slice(0, rule.parameters.length));
+        const initial = Float64Array.from(point.slice(rule.parameters.length));
         const compiled = compileRule(rule);
-        if (table) compiled.pathWithSensitivities(initial, constants, inputs, 0, 2, values, table);
-        else compiled.path(initial, constants, inputs, 0, 2, values);
+        if (table) compiled.pathWithSensitivities(initial, parameters, inputs, 0, 2, values, table);
+        else compiled.path(initial, parameters, inputs, 0, 2, values);
         return values;
       };
       const table = new Float64Array(3 * width * unknowns);
@@ -185,10 +185,10 @@ test("bounds over an interval hold the value at every point of it", () => {
       (text, low, width, part) => {
         const one = text.replace(/P(\[t-2\])?|N\[t-1\]|\bu\b(\[t\+1\])?|\bt\b/gu, "N");
         const rule = recurrence(`N[t+1] = ${one} + 0*r*K`);
-        const constants = new Float64Array(rule.constants.length).fill(0.75);
-        const { value } = encloseStep(rule, { constants, inputs: new Float64Array(0) })([low, low + width]);
+        const parameters = new Float64Array(rule.parameters.length).fill(0.75);
+        const { value } = encloseStep(rule, { parameters, inputs: new Float64Array(0) })([low, low + width]);
         const next = new Float64Array(1);
-        compileRule(rule).step(Float64Array.of(low + part * width), constants, [], 0, next);
+        compileRule(rule).step(Float64Array.of(low + part * width), parameters, [], 0, next);
         if (!Number.isFinite(next[0]!)) return;
         expect(value[0]).toBeLessThanOrEqual(next[0]!);
         expect(value[1]).toBeGreaterThanOrEqual(next[0]!);

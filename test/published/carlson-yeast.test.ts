@@ -9,8 +9,8 @@ import {
   leastSquares,
   type Observations,
   observations,
-  reaches,
   recurrence,
+  timeToReach,
 } from "../../kernel-helpers/index.js";
 import { yeast } from "./carlson-yeast.js";
 
@@ -40,7 +40,7 @@ describe("Carlson's yeast record", () => {
   const logistic = fit(recurrence("N[t+1] = A/(1 + exp((m - t)/s))"), ledByOne(), { errors: "process" });
   const three = ["A", "m", "s"];
 
-  test("Y1: the three-constant logistic by its three constants", () => {
+  test("Y1: the three-parameter logistic by its three parameters", () => {
     const coefficients = [663.0219894, 7.80768758, 1.828171163];
     const errors = [1.702728685, 0.02233745391, 0.01865843903];
     three.forEach((name, i) => {
@@ -122,7 +122,7 @@ describe("Carlson's yeast record", () => {
   test("Y6: log ratio on level", () => {
     const line = fit(recurrence("N[t+1] = N*exp(a + b*N)"), record(), {
       errors: "process",
-      spread: "proportional",
+      distribution: "lognormal",
     });
     expect(off(named(line, "a").value, 0.5217460871)).toBeLessThan(1e-6);
     expect(off(named(line, "b").value, -0.0008031497502)).toBeLessThan(1e-6);
@@ -168,7 +168,7 @@ describe("Carlson's yeast record", () => {
     expect(off(central[24], 662.927611)).toBeLessThan(1e-6);
     const capacity = named(stepped, "K").value;
     const at = (share: number): number | undefined =>
-      reaches(ahead, { value: share * capacity, direction: "rising" }).groups[0]!.time;
+      timeToReach(ahead, { value: share * capacity, direction: "rising" }).groups[0]!.time;
     // Source: closed form of the same fit, printed to ten digits; between whole hours the rule's path is the logistic curve
     // itself. K comes from a search that stops at a relative 1e-5, which moves the times by less than 1e-6 of themselves.
     expect(off(at(0.95), 13.19062601)).toBeLessThan(1e-6);

@@ -5,7 +5,7 @@ import { fit, leastSquares, observations, recurrence } from "../../kernel-helper
 import { named, near } from "./matchers.js";
 import { readColumns } from "./read-columns.js";
 
-type Curve = (constants: ArrayLike<number>, x: number) => number;
+type Curve = (parameters: ArrayLike<number>, x: number) => number;
 const logistic: Curve = (c, x) => c[0]! / (1 + Math.exp((c[1]! - x) / c[2]!));
 
 function solved(x: readonly number[], y: readonly number[], curve: Curve, start: readonly number[]) {

@@ -6,7 +6,7 @@ import { named, near } from "./matchers.js";
 import { readColumns } from "./read-columns.js";
 
 const sheltered = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)");
-const trajectory = { errors: "observation", spread: "proportional" } as const;
+const trajectory = { errors: "observation", distribution: "lognormal" } as const;
 
 describe("a culture read every half hour", () => {
   const { hours, density } = readColumns("invented/culture-density.csv");
@@ -67,13 +67,13 @@ describe("C-9: counts that wander and are read with error", () => {
   const rule = recurrence("N[t+1] = exp(a)*N^b");
 
   test("the one-step slope is drawn towards 0", () => {
-    const naive = fit(rule, counts, { errors: "process", spread: "proportional" });
+    const naive = fit(rule, counts, { errors: "process", distribution: "lognormal" });
     near(named(naive, "b").value, 0.60457, 1e-5);
     near(named(naive, "b").standardError, 0.1074, 5e-4);
   });
 
   test("the state-space likelihood, exact on the log scale, with its profile", () => {
-    const both = fit(rule, counts, { errors: "both", spread: "proportional" });
+    const both = fit(rule, counts, { errors: "both", distribution: "lognormal" });
     const [group] = both.groups;
     near(named(both, "a").value, 0.5706, 1e-4);
     near(named(both, "b").value, 0.7246, 1e-4);
@@ -97,7 +97,7 @@ describe("S-8: sales on days that may have sold out", () => {
   const steady = recurrence("D[t+1] = D");
 
   test("as counts", () => {
-    const fitted = fit(steady, days, { errors: "observation", spread: "poisson" });
+    const fitted = fit(steady, days, { errors: "observation", distribution: "poisson" });
     const mean = named(fitted, "D[0]");
     near(mean.value, 17.0913, 3e-6);
     near(mean.standardError, 1.127, 5e-4);
@@ -131,7 +131,7 @@ test("S-9b: a harvested stock seen through an index of unknown factor", () => {
   near(named(fitted, "B[0]").value / named(fitted, "K").value, 0.9406, 1e-4);
   near(named(fitted, "q").value, 0.012647, 5e-5);
   near(Math.sqrt(fitted.groups[0]!.sumOfSquares / fitted.groups[0]!.count), 0.069, 1e-3);
-  // The greatest sustainable yield r K / 4 as a constant of its own.
+  // The greatest sustainable yield r K / 4 as a parameter of its own.
   const inYield = recurrence("B[t+1] = B + 4*most/K*B*(1 - B/K) - taken", { inputs: ["taken"] });
   const yields = named(fit(inYield, survey, options), "most");
   near(yields.value, 92.85, 6e-5);
@@ -139,14 +139,14 @@ test("S-9b: a harvested stock seen through an index of unknown factor", () => {
   near(yields.profile.upper, 98.72, 6e-5);
 });
 
-test("G-9: growth of known scatter, with the constant's own error in the predictions", () => {
+test("G-9: growth of known scatter, with the parameter's own error in the predictions", () => {
   // 24 increments whose mean is 0.03 exactly, of known standard deviation 0.06.
   const level = Array.from({ length: 25 }, (_, t) => 3 + 0.03 * t + (t % 2 === 0 ? 0 : 0.04));
   const series = observations(
     { year: level.map((_, t) => t), level },
     { period: "year", step: { every: 1, of: "year" }, value: "level" },
   );
-  const fitted = fit(recurrence("L[t+1] = L + g"), series, { errors: "process", spread: { sd: 0.06 } });
+  const fitted = fit(recurrence("L[t+1] = L + g"), series, { errors: "process", sd: 0.06 });
   near(named(fitted, "g").value, 0.03, 1e-9);
   const error = named(fitted, "g").standardError!;
   const predicted = (ahead: number): number => Math.sqrt(ahead * 0.06 ** 2 + (ahead * error) ** 2);

@@ -1,7 +1,7 @@
 // Source: NIST/ITL, Statistical Reference Datasets, Nonlinear Regression; certified to 11 digits.
-// Digits are -log10 of the relative error. Held to 6 for constants and sums of squares, 4 for standard deviations.
+// Digits are -log10 of the relative error. Held to 6 for parameters and sums of squares, 4 for standard deviations.
 // Lanczos1 was made from its model with 14 digits: its sum of squares, 1.43E-25, is below the reach of double
-// precision, so only its constants are compared.
+// precision, so only its parameters are compared.
 import { describe, expect, test } from "vitest";
 import { leastSquares } from "../../src/numeric/index.js";
 import { correctDigits, fewestDigits } from "./nist/correct-digits.js";

@@ -78,7 +78,7 @@ test("D10: exact likelihood of a first-order autoregression, read without error"
   );
   const exact = fit(recurrence("H[t+1] = mean + phi*(H - mean)"), series, {
     errors: "both",
-    spread: { sd: 0 },
+    sd: 0,
   });
   near(named(exact, "phi").value, 0.5739296, 1e-3);
   near(named(exact, "phi").standardError, 0.1161393, 1e-3);

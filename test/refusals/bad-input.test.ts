@@ -34,14 +34,14 @@ async function file(name: string, text: string): Promise<Awaited<ReturnType<type
 
 test("an unknown name in a rule", async () => {
   const told = await refusal(() =>
-    recurrence("N[t+1] = N + r*N*(1 - N/capcity)", { constants: ["r", "capacity"] }),
+    recurrence("N[t+1] = N + r*N*(1 - N/capcity)", { parameters: ["r", "capacity"] }),
   );
   expect(told).toMatchInlineSnapshot(`
     "ModelError unknown-name
     Unknown name "capcity" in the rule.
         N[t+1] = N + r*N*(1 - N/capcity)
                                 ^^^^^^^
-    Known constants: r, capacity. Other names: N. Did you mean "capacity"?"
+    Known parameters: r, capacity. Other names: N. Did you mean "capacity"?"
   `);
 });
 
@@ -71,7 +71,7 @@ test("too few rows", async () => {
   const told = await refusal(() => fit(crowding, weekly([12, 15, 19, 24, 28]), { errors: "observation" }));
   expect(told).toMatchInlineSnapshot(`
     "ModelError too-few-observations
-    5 usable values for 3 unknowns (r, K, N[0]): not fitted. At least 6 are needed; use a rule with fewer constants, fix some with { fixed }, or wait for more rows."
+    5 usable values for 3 unknowns (r, K, N[0]): not fitted. At least 6 are needed; use a rule with fewer parameters, fix some with { fixed }, or wait for more rows."
   `);
 });
 
@@ -92,6 +92,6 @@ test("a rule that leaves the finite range", async () => {
   );
   expect(told).toMatchInlineSnapshot(`
     "ModelError no-finite-start
-    No constants were found at which "N[t+1] = exp(a*N) + 1e200*N" stays finite over the record. Give { start: { ... } } near plausible values, or { bounds: { ... } } that keep the rule in its range."
+    No parameters were found at which "N[t+1] = exp(a*N) + 1e200*N" stays finite over the record. Give { start: { ... } } near plausible values, or { bounds: { ... } } that keep the rule in its range."
   `);
 });

@@ -10,7 +10,7 @@ test("TeX is set as a paper would: fractions, subscripts, side-by-side products"
   );
 });
 
-test("TeX of a fitted rule has the numbers in place of the constants", () => {
+test("TeX of a fitted rule has the numbers in place of the parameters", () => {
   const rule = recurrence("owed[t+1] = a*owed + b");
   expect(ruleTex(rule, { a: "1.0035", b: -250 })).toBe(
     "\\mathrm{owed}_{t+1} = 1.0035\\,\\mathrm{owed}_{t} + \\left(-250\\right)",

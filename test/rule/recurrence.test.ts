@@ -1,10 +1,10 @@
 import { expect, test } from "vitest";
 import { compileRule, interpretRule, recurrence, ruleText } from "../../src/rule/index.js";
 
-test("a rule names its states and constants in order of appearance", () => {
+test("a rule names its states and parameters in order of appearance", () => {
   const rule = recurrence("ΔN = r*N*(1 - N/K)");
   expect(rule.states).toEqual(["N"]);
-  expect(rule.constants).toEqual(["r", "K"]);
+  expect(rule.parameters).toEqual(["r", "K"]);
   expect(rule.form).toBe("change");
   expect(ruleText(rule)).toBe("ΔN = r*N*(1 - N/K)");
 });

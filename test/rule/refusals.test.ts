@@ -12,12 +12,12 @@ const message = (text: string, options?: RecurrenceOptions): string => {
 
 test("an unknown name is refused with its place and the nearest names", () => {
   expect(
-    message("x[t+1] = x*(1 + r*(1 - x/capcity))", { constants: ["r", "capacity"] }),
+    message("x[t+1] = x*(1 + r*(1 - x/capcity))", { parameters: ["r", "capacity"] }),
   ).toMatchInlineSnapshot(`
     "Unknown name "capcity" in the rule.
         x[t+1] = x*(1 + r*(1 - x/capcity))
                                  ^^^^^^^
-    Known constants: r, capacity. Other names: x. Did you mean "capacity"?"
+    Known parameters: r, capacity. Other names: x. Did you mean "capacity"?"
   `);
 });
 
@@ -87,7 +87,7 @@ test("a value of the future is refused, except the next row's input", () => {
   `);
   expect(message("owed[t+1] = owed - paid[t+1]", { inputs: ["paid"] })).toBe("");
   expect(message("owed[t+1] = owed - paid[t+1]")).toMatchInlineSnapshot(`
-    ""paid" is a constant and has no value of its own in other periods.
+    ""paid" is a parameter and has no value of its own in other periods.
         owed[t+1] = owed - paid[t+1]
                            ^^^^^^^^^
     If it is recorded by period, declare it: { inputs: ["paid"] }."
@@ -135,9 +135,9 @@ test("numbers of mathematics are not taken for granted", () => {
     ""e" is not taken for a number of mathematics.
         N[t+1] = N*e^r
                    ^
-    Write exp(1), or declare it as a constant of your own: { constants: ["e", ...] }."
+    Write exp(1), or declare it as a parameter of your own: { parameters: ["e", ...] }."
   `);
-  expect(message("N[t+1] = N*e", { constants: ["e"] })).toBe("");
+  expect(message("N[t+1] = N*e", { parameters: ["e"] })).toBe("");
 });
 
 test("signs of other notations are refused with ours", () => {
@@ -231,8 +231,8 @@ test("texts beyond the limits of length, depth and parts are refused at once", (
 });
 
 test("options that speak of other names or give no number are refused", () => {
-  expect(message("N[t+1] = R*N", { guesses: { r: 1 } })).toMatchInlineSnapshot(
-    `"The option guesses speaks of "r", which is no constant of the rule. Known: R. Did you mean "R"?"`,
+  expect(message("N[t+1] = R*N", { start: { r: 1 } })).toMatchInlineSnapshot(
+    `"The option start speaks of "r", which is no parameter of the rule. Known: R. Did you mean "R"?"`,
   );
   expect(message("N[t+1] = R*N", { bounds: { R: [2, 1] } })).toMatchInlineSnapshot(
     `"The option bounds gives [2,1] for "R". Give two numbers, lowest first, as in [0, Infinity]."`,
@@ -246,7 +246,7 @@ test("names one letter apart and names never used are findings, not refusals", (
   const rule = recurrence("ΔN = growth*N*(1 - N/capacity) - grovth*N", { inputs: ["rain"] });
   expect(rule.findings.map(({ code, message }) => `${code}: ${message}`)).toMatchInlineSnapshot(`
     [
-      "names-look-alike: "growth" and "grovth" differ by one letter; they are read as two names. If one is a slip, correct it; declare { constants: [...] } to have every other name refused.",
+      "names-look-alike: "growth" and "grovth" differ by one letter; they are read as two names. If one is a slip, correct it; declare { parameters: [...] } to have every other name refused.",
       "declared-but-unused: "rain" is declared and stands nowhere in the rule. Take it out, or look for a slip in the text.",
     ]
   `);

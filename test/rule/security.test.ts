@@ -1,5 +1,5 @@
 import { expect, test } from "vitest";
-import { path } from "../../src/dynamics/index.js";
+import { trajectory } from "../../src/dynamics/index.js";
 import { compileRule, recurrence } from "../../src/rule/index.js";
 
 /** Each would reach the host program if any text were ever run, or looked up on an object. */
@@ -62,7 +62,7 @@ test.each(["constructor", "__proto__", "prototype", "t", "exp"])("%s cannot be d
   expect(() => recurrence("N[t+1] = N", { inputs: [name] })).toThrow(
     expect.objectContaining({ name: "ModelError" }),
   );
-  expect(() => recurrence("N[t+1] = N", { constants: [name] })).toThrow(
+  expect(() => recurrence("N[t+1] = N", { parameters: [name] })).toThrow(
     expect.objectContaining({ name: "ModelError" }),
   );
 });
@@ -83,10 +83,10 @@ const hostNames = [
   "hasOwnProperty",
 ];
 
-test.each(hostNames)("%s is a constant like any other", (name) => {
+test.each(hostNames)("%s is a parameter like any other", (name) => {
   const rule = recurrence(`N[t+1] = ${name}*N`);
-  expect(rule.constants).toEqual([name]);
-  const run = path(rule, { constants: { [name]: 2 }, initial: { N: 1 }, periods: 3 });
+  expect(rule.parameters).toEqual([name]);
+  const run = trajectory(rule, { parameters: { [name]: 2 }, initial: { N: 1 }, periods: 3 });
   expect([...run.values["N"]!]).toEqual([1, 2, 4, 8]);
 });
 
@@ -100,7 +100,7 @@ test("generated functions hold no name of the text", () => {
 
 test("values handed in under inherited names do not count as given", () => {
   const rule = recurrence("N[t+1] = toString*N");
-  expect(() => path(rule, { constants: {}, initial: { N: 1 }, periods: 1 })).toThrow(/"toString"/u);
+  expect(() => trajectory(rule, { parameters: {}, initial: { N: 1 }, periods: 1 })).toThrow(/"toString"/u);
 });
 
 test("where a host forbids generated code the interpreter serves, with the same numbers", () => {

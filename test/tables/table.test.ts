@@ -12,7 +12,7 @@ import {
 afterEach(() => void numberFormat("standard"));
 
 const estimate: Column[] = [
-  { key: "name", label: "Constant", kind: "text" },
+  { key: "name", label: "Parameter", kind: "text" },
   { key: "value", label: "Estimate", kind: "estimate", pairedWith: "error" },
   { key: "error", label: "Standard error", kind: "estimate" },
 ];
@@ -113,13 +113,13 @@ test("text lines up in a terminal, wide letters and footnote marks included", ()
   expect(tableText(made)).toMatchInlineSnapshot(`
     "Estimates
 
-    Constant   Estimate  Standard error  Unit
-    ────────  ─────────  ──────────────  ───────
-    K            167 a)              16  10^4/mL
-    日本語      4.61               0.16
-    r         -1.472              0.018  –
-    ────────  ─────────  ──────────────  ───────
-    Sum            3
+    Parameter   Estimate  Standard error  Unit
+    ─────────  ─────────  ──────────────  ───────
+    K             167 a)              16  10^4/mL
+    日本語       4.61               0.16
+    r          -1.472              0.018  –
+    ─────────  ─────────  ──────────────  ───────
+    Sum             3
 
     Profile intervals.
     a: correlated with r

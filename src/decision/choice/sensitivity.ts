@@ -11,23 +11,23 @@ import { opened, percent, plain } from "../words/amount.js";
 /** Options of `sensitivity`. */
 export interface SensitivityOptions extends StandingOptions {
   readonly answer: Measure;
-  /** Constants, first values and inputs to move; default what the fit estimates, or all constants of a rule. */
-  readonly of?: readonly string[];
+  /** Parameters, first values and inputs to move; default what the fit estimates, or all parameters of a rule. */
+  readonly vary?: readonly string[];
 }
 
-/** How an answer moves with one constant. Infinite where a time is then never reached. */
+/** How an answer moves with one parameter. Infinite where a time is then never reached. */
 export interface SensitivityRow {
   readonly name: string;
   readonly value: number;
   readonly unit: string;
   readonly standardError: number | undefined;
-  /** The answer with the constant one standard error lower and higher; undefined without a standard error. */
+  /** The answer with the parameter one standard error lower and higher; undefined without a standard error. */
   readonly errorLower: number | undefined;
   readonly errorUpper: number | undefined;
-  /** The answer with the constant ten per cent lower and higher. */
+  /** The answer with the parameter ten per cent lower and higher. */
   readonly tenthLower: number;
   readonly tenthUpper: number;
-  /** Per cent of the answer for one per cent of the constant, at the estimate; NaN where either is 0. */
+  /** Per cent of the answer for one per cent of the parameter, at the estimate; NaN where either is 0. */
   readonly elasticity: number;
 }
 
@@ -43,7 +43,7 @@ export interface Sensitivity {
 }
 
 /**
- * How an answer changes for one standard error and for ten per cent of each constant, one at a time, and its
+ * How an answer changes for one standard error and for ten per cent of each parameter, one at a time, and its
  * elasticity (central differences of a ten-thousandth).
  *
  * @throws {ModelError} `no-such-setting` | `outside-projection` | `unknown-name` | `risk-not-smooth`.
@@ -54,7 +54,7 @@ export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): S
   const standing = standingOf(subject, options);
   const read = measureReader(standing, options.answer);
   const answer = read(standing.ground);
-  const names = options.of ?? movable(standing);
+  const names = options.vary ?? movable(standing);
   const rows = names.map((name) => rowOf(standing, name, read, answer)).sort((a, b) => effect(b) - effect(a));
   const measure = measureWords(options.answer, standing);
   const unit =
@@ -72,9 +72,9 @@ export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): S
 }
 
 function movable({ rule, fitGround }: Standing): readonly string[] {
-  if (fitGround === undefined) return rule.constants;
+  if (fitGround === undefined) return rule.parameters;
   return fitGround.group.estimates
-    .filter((estimate, i) => fitGround.places[i]! >= 0 || estimate.role === "constant")
+    .filter((estimate, i) => fitGround.places[i]! >= 0 || estimate.role === "parameter")
     .map((estimate) => estimate.name);
 }
 

@@ -19,11 +19,11 @@ export type Target = Measure &
 
 /** Options of `solveFor`. */
 export interface SolveOptions extends StandingOptions {
-  /** A constant, a first value such as "N[0]", or an input whose usual level is sought. */
-  readonly unknown: string;
+  /** A parameter, a first value such as "N[0]", or an input whose usual level is sought. */
+  readonly vary: string;
   readonly until: Target;
   /** Lowest and highest value looked at; default a hundredth to a hundred times the present one, within its bounds. */
-  readonly between?: readonly [number, number];
+  readonly range?: readonly [number, number];
   /** The setting comes in multiples of this (0.01 for money, 1 for pieces): rounded to the side that meets the target. */
   readonly multiple?: number;
   /** Level of the interval; default 0.95. */
@@ -40,19 +40,19 @@ export interface Solution {
   readonly achievedError: number;
   /** Which side of the setting meets an `atMost` or `atLeast`. */
   readonly meets: "this value only" | "this value and above" | "this value and below";
-  /** From the uncertainty of a fit's constants; absent for a rule, and where the measure is a risk, which carries it. */
+  /** From the uncertainty of a fit's parameters; absent for a rule, and where the measure is a risk, which carries it. */
   readonly margin: SettingMargin | undefined;
 }
 
 /** Settings that meet a target. */
 export interface Solved {
   readonly kind: "solution";
-  readonly unknown: string;
+  readonly vary: string;
   readonly unit: string;
   readonly target: Target;
   /** The measure in words. */
   readonly measure: string;
-  readonly between: readonly [number, number];
+  readonly range: readonly [number, number];
   /** By increasing value; empty where nothing in the range meets the target, or everything does. */
   readonly solutions: readonly Solution[];
   /** Whether every setting looked at meets the target; then the smallest and the largest measure found. */

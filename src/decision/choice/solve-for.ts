@@ -22,23 +22,23 @@ import { solveSentence } from "./solve-sentence.js";
 import { type Roots, solveWithin } from "./solve-within.js";
 
 /**
- * Finds what a constant, a first value or the level of an input must be, so that a measure of the projection meets a target.
+ * Finds what a parameter, a first value or the level of an input must be, so that a measure of the projection meets a target.
  *
  * The range is looked over for every crossing, so several solutions, and none, are answers. For a fit each solution
- * has an interval from 400 draws of the constants, each solved anew; a risk carries the constants' uncertainty and
+ * has an interval from 400 draws of the parameters, each solved anew; a risk carries the parameters' uncertainty and
  * the random change itself.
  *
- * @param options.unknown - its unit is that of the constant, state or input.
+ * @param options.vary - its unit is that of the parameter, state or input.
  * @throws {ModelError} `no-such-setting` | `no-effect` | `past-already` | `risk-outside` | `no-range` | `bounds-contradict` | `no-target` |
  *   `future-input-missing` | `outside-projection` | `unknown-name`.
  * @example
  * const loan = recurrence("owed[t+1] = owed*(1 + i) - payment", { fixed: { i: 0.01 } });
- * const asked = solveFor(loan, { unknown: "payment", constants: { payment: 100 }, initial: { owed: 1000 }, periods: 12,
+ * const asked = solveFor(loan, { vary: "payment", parameters: { payment: 100 }, initial: { owed: 1000 }, periods: 12,
  *   until: { level: "owed", at: 12, is: 0 } });
  * asked.solutions[0].value // 1000*0.01/(1 - 1.01**-12)
  */
 export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
-  const { unknown, until, level = 0.95 } = options;
+  const { vary: unknown, until, level = 0.95 } = options;
   const aim = aimOf(until);
   const setting = rangeable(subject, options);
   const standing = standingOf(subject, withUnplanned(subject, options, unknown, setting.between));
@@ -62,11 +62,11 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
     solutionAt(standing, found, until, root, reader, excess, options),
   );
   const question = {
-    unknown,
+    vary: unknown,
     unit: standing.unitOf(unknown),
     target: until,
     measure: measureWords(until, standing),
-    between: [from, to] as const,
+    range: [from, to] as const,
     level,
   };
   const answer = { ...question, solutions, everywhere, nearest: nearestOf(roots, reader) };
@@ -82,7 +82,7 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
 
 function rangeable(
   subject: Fit | Rule,
-  { between, unknown }: SolveOptions,
+  { range: between, vary: unknown }: SolveOptions,
 ): { between?: readonly [number, number] } {
   if (between === undefined) return {};
   const [from, to] = between;

@@ -8,7 +8,7 @@ type Question = Omit<Solved, "kind" | "sentence">;
 
 /** The answer in words: what to set, the margin, what it brings about, and on what it stands. */
 export function solveSentence(answer: Question, standing: Standing): string {
-  const { unknown, solutions } = answer;
+  const { vary: unknown, solutions } = answer;
   if (answer.everywhere !== undefined) return everyWords(answer, answer.everywhere, standing);
   if (solutions.length === 0) return unsolved(answer, standing);
   const settings = solutions.map((solution) => settingWords(solution, answer)).join(", or ");
@@ -29,7 +29,7 @@ function broughtWords(target: Target, { achieved, achievedError }: Solution, sta
 
 /** Where every setting looked at meets the target. */
 function everyWords(
-  { unknown, unit, between, measure, target }: Question,
+  { vary: unknown, unit, range, measure, target }: Question,
   [least, greatest]: readonly [number, number],
   standing: Standing,
 ): string {
@@ -40,10 +40,10 @@ function everyWords(
   };
   const same = Number.isFinite(least) ? `${said(least)} throughout` : said(least);
   const span = least === greatest ? same : `from ${said(least)} to ${said(greatest)}`;
-  return `Every ${unknown} looked at from ${rangeWords(between, unit)} meets the target: ${measure} is ${span}${risk ? " (simulated)" : ""}, provided ${conditionWords(standing.rule, standing.fit)}.`;
+  return `Every ${unknown} looked at from ${rangeWords(range, unit)} meets the target: ${measure} is ${span}${risk ? " (simulated)" : ""}, provided ${conditionWords(standing.rule, standing.fit)}.`;
 }
 
-function rangeWords(between: Question["between"], unit: string): string {
+function rangeWords(between: Question["range"], unit: string): string {
   return `${plain(between[0], 4)} to ${amount(plain(between[1], 4), unit)}`;
 }
 
@@ -80,7 +80,7 @@ function endOfRisk({ target, nearest }: Question): boolean {
 }
 
 function unsolved(answer: Question, standing: Standing): string {
-  const { unknown, unit, between, measure, nearest, target } = answer;
+  const { vary: unknown, unit, range: between, measure, nearest, target } = answer;
   const range = rangeWords(between, unit);
   if (endOfRisk(answer))
     return `No ${unknown} looked at from ${range} brings ${measure} to the target: it is ${100 * nearest.achieved}% throughout (simulated).`;

@@ -13,8 +13,8 @@ import { signNotes } from "./solve-notes.js";
 
 /** Options of `tradeoff`. */
 export interface TradeoffOptions extends StandingOptions {
-  /** A constant, a first value such as "N[0]", or an input whose usual level is chosen. */
-  readonly setting: string;
+  /** A parameter, a first value such as "N[0]", or an input whose usual level is chosen. */
+  readonly vary: string;
   /** Settings to look at: a list, or two ends with how many. */
   readonly values: readonly number[] | { readonly from: number; readonly to: number; readonly count: number };
   /** What each setting brings, by the name it is shown under. */
@@ -24,14 +24,14 @@ export interface TradeoffOptions extends StandingOptions {
 /** What several settings bring, side by side. */
 export interface Tradeoff {
   readonly kind: "tradeoff";
-  readonly setting: string;
+  readonly vary: string;
   readonly unit: string;
   /** By answer: what is measured, in words. */
   readonly measures: Readonly<Record<string, string>>;
   readonly answers: Readonly<Record<string, Measure>>;
   /** By setting: every answer, and the Monte-Carlo error of each (0 where nothing is random). */
   readonly rows: readonly {
-    readonly setting: number;
+    readonly value: number;
     readonly answers: Readonly<Record<string, number>>;
     readonly errors: Readonly<Record<string, number>>;
   }[];
@@ -43,13 +43,13 @@ export interface Tradeoff {
  *
  * @throws {ModelError} `no-such-setting` | `no-values` | `unknown-name` | `outside-projection` | `nothing-random`.
  * @example
- * const stock = recurrence("B[t+1] = B + 0.5*B*(1 - B/100) - catch", { constants: ["catch"] });
- * const found = tradeoff(stock, { setting: "catch", values: [5, 10], constants: { catch: 5 }, initial: { B: 50 }, periods: 20,
+ * const stock = recurrence("B[t+1] = B + 0.5*B*(1 - B/100) - catch", { parameters: ["catch"] });
+ * const found = tradeoff(stock, { vary: "catch", values: [5, 10], parameters: { catch: 5 }, initial: { B: 50 }, periods: 20,
  *   answers: { stock: { level: "B", at: 20 } } });
  * found.rows.length // 2
  */
 export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeoff {
-  const { setting: name, answers } = options;
+  const { vary: name, answers } = options;
   const values = valuesOf(options.values);
   const first = values[0];
   if (first === undefined || Object.keys(answers).length === 0) throw refuseNoValues();
@@ -62,7 +62,7 @@ export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeof
   const rows = values.map((value) => {
     const found = readers.map(({ shown, read }) => [shown, read(value)] as const);
     return {
-      setting: value,
+      value,
       answers: Object.fromEntries(found.map(([shown, risk]) => [shown, risk.value])),
       errors: Object.fromEntries(found.map(([shown, risk]) => [shown, risk.error])),
     };
@@ -73,12 +73,12 @@ export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeof
   const unit = standing.unitOf(name);
   const notes = [rows[0]!, rows[rows.length - 1]!].flatMap((row) =>
     Object.entries(answers).flatMap(([shown, measure]) =>
-      signNotes(standing, setting, row.setting, measure, row.answers[shown]!),
+      signNotes(standing, setting, row.value, measure, row.answers[shown]!),
     ),
   );
   return Object.freeze({
     kind: "tradeoff",
-    setting: name,
+    vary: name,
     unit,
     measures: Object.freeze(measures),
     answers,
@@ -94,14 +94,14 @@ function valuesOf(values: TradeoffOptions["values"]): readonly number[] {
   );
 }
 
-/** Under random change what is expected is the mean over paths; times and constants are those of the central path. */
+/** Under random change what is expected is the mean over paths; times and parameters are those of the central path. */
 function readerOf(standing: Standing, setting: Setting, measure: Measure): (value: number) => Estimated {
   if (isRisk(measure)) {
     const read = riskReader(standing, measure);
     return (value) => read(setting, value);
   }
   const random = standing.change.some((noise) => noise !== undefined);
-  if (random && !("time" in measure) && !("constant" in measure)) {
+  if (random && !("time" in measure) && !("parameter" in measure)) {
     const read = expectedReader(standing, measure);
     return (value) => read(setting, value);
   }
@@ -126,7 +126,7 @@ function sentenceOf(
           : measuredWords(measure, value, row.errors[shown]!, standing);
       return `${shown} ${words}`;
     });
-    return `with ${name} at ${amount(plain(row.setting, 6), unit)}: ${each.join(", ")}`;
+    return `with ${name} at ${amount(plain(row.value, 6), unit)}: ${each.join(", ")}`;
   });
   return `${said.join("; ")}.`.replace(/^w/, "W");
 }

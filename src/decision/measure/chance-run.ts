@@ -22,12 +22,12 @@ export type Listener = Pick<EnsembleRun, "onRow" | "onStep">;
 /** Runs all paths at a setting of its own, or as things stand. */
 export type ChanceRun = (listener: Listener, setting?: Setting, value?: number) => void;
 
-/** Whether chance has a part: random change of a rule, or a fit, whose constants are uncertain. */
+/** Whether chance has a part: random change of a rule, or a fit, whose parameters are uncertain. */
 export function hasChance({ fit, change }: Standing): boolean {
   return fit !== undefined || change.some((noise) => noise !== undefined);
 }
 
-/** Runs that all meet the same random numbers, and for a fit the same drawn constants. */
+/** Runs that all meet the same random numbers, and for a fit the same drawn parameters. */
 export function chanceRun(standing: Standing): ChanceRun {
   const { rule, change, paths, fit } = standing;
   const source = fit && unknownsDraw(fit, standing.fitGround!.group);
@@ -61,15 +61,16 @@ function sharedStarts(ground: Ground, paths: number): RunStarts {
   return {
     spread: undefined,
     paths,
-    size: ground.constants.length,
-    constants: ground.constants,
+    size: ground.parameters.length,
+    parameters: ground.parameters,
     initial: ground.initial,
   };
 }
 
 /** Drawn starts with a setting held: what is set is no longer drawn. */
 function withSetting(starts: Starts, { role, slot }: Setting, ground: Ground): Starts {
-  if (role === "constant") return { ...starts, constants: held(starts.constants, ground.constants, slot) };
+  if (role === "parameter")
+    return { ...starts, parameters: held(starts.parameters, ground.parameters, slot) };
   if (role === "initial") return { ...starts, initial: held(starts.initial, ground.initial, slot) };
   return starts;
 }

@@ -12,7 +12,7 @@ interface Window {
  *
  * `level`: a state `at` a period ahead. `average`, `total`, `lowest`, `highest`: over a window of periods. `time`: when
  * a state first reaches a value, in the unit of the period column. `risk`: the probability that it ever does within
- * the projection. `constant`: a constant of the rule itself.
+ * the projection. `parameter`: a parameter of the rule itself.
  */
 export type Measure =
   | { readonly level: string; readonly at: number }
@@ -22,10 +22,18 @@ export type Measure =
   | ({ readonly highest: string } & Window)
   | { readonly time: string; readonly value: number; readonly direction: Direction }
   | { readonly risk: string; readonly value: number; readonly direction: Direction }
-  | { readonly constant: string };
+  | { readonly parameter: string };
 
 /** What a measure does, with the name it is taken of. */
-export type MeasureKind = "level" | "average" | "total" | "lowest" | "highest" | "time" | "risk" | "constant";
+export type MeasureKind =
+  | "level"
+  | "average"
+  | "total"
+  | "lowest"
+  | "highest"
+  | "time"
+  | "risk"
+  | "parameter";
 
 const kinds: readonly MeasureKind[] = [
   "level",
@@ -35,7 +43,7 @@ const kinds: readonly MeasureKind[] = [
   "highest",
   "time",
   "risk",
-  "constant",
+  "parameter",
 ];
 
 /** The kind of a measure and the name that it is taken of. */
@@ -57,7 +65,7 @@ export interface MeasureUnits {
 export function measureWords(measure: Measure, units: MeasureUnits): string {
   const { kind, name } = measureOf(measure);
   if ("level" in measure) return `${name} ${measure.at} ${plural(units.periodUnit, measure.at)} ahead`;
-  if (kind === "constant") return name;
+  if (kind === "parameter") return name;
   if ("time" in measure) return `the time at which ${reachWords(name, measure, units)}`;
   if ("risk" in measure) return `the risk that ${reachWords(name, measure, units)}`;
   return `the ${kind} of ${name}${windowWords(measure as Window, units)}`;

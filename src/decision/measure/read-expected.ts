@@ -68,8 +68,8 @@ function follower(
   const { inputs, from } = ground;
   return (each) => ({
     onRow: () => undefined,
-    onStep: (path, present, constants, t) => {
-      each(t - from + 1, path, quantities({ state: present, constants, inputs, t })[place]!);
+    onStep: (path, present, parameters, t) => {
+      each(t - from + 1, path, quantities({ state: present, parameters, inputs, t })[place]!);
     },
   });
 }

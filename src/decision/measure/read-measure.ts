@@ -16,10 +16,10 @@ export type MeasureReader = (ground: Ground) => number;
 export function measureReader(standing: Standing, measure: Measure): MeasureReader {
   const { rule, present, ground } = standing;
   const { kind, name } = measureOf(measure);
-  if (kind === "constant") {
-    const place = rule.constants.indexOf(name);
-    if (place < 0) throw refuseMeasureName(name, rule.constants);
-    return (at) => at.constants[place]!;
+  if (kind === "parameter") {
+    const place = rule.parameters.indexOf(name);
+    if (place < 0) throw refuseMeasureName(name, rule.parameters);
+    return (at) => at.parameters[place]!;
   }
   const column = columnReader(standing, name);
   if ("time" in measure) return timeReader(standing, measure, column);
@@ -56,12 +56,12 @@ function columnReader(standing: Standing, name: string): (ground: Ground) => rea
   if (place < 0) throw refuseMeasureName(name, [...rule.states, ...rule.quantities]);
   const quantities = quantitiesAt(rule);
   return (ground) => {
-    const { constants, inputs, from } = ground;
+    const { parameters, inputs, from } = ground;
     const state = ground.initial.slice();
     const values = [Number.NaN];
     for (let t = 0; t < ground.periods; t++) {
-      values.push(quantities({ state, constants, inputs, t: from + t })[place]!);
-      ground.compiled.step(state, constants, inputs, from + t, state);
+      values.push(quantities({ state, parameters, inputs, t: from + t })[place]!);
+      ground.compiled.step(state, parameters, inputs, from + t, state);
     }
     return values;
   };

@@ -16,7 +16,7 @@ export type EstimatedReader = (setting?: Setting, value?: number) => Estimated;
 
 /**
  * Reads a risk: the share of paths that ever get to the value ahead of the present. Every setting meets the same
- * random numbers, and for a fit the same drawn constants.
+ * random numbers, and for a fit the same drawn parameters.
  *
  * @throws {ModelError} `unknown-name` | `nothing-random`.
  */

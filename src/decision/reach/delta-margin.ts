@@ -46,10 +46,10 @@ export function deltaMargin(
 /** The ground with one unknown moved. */
 export function moved(ground: FitGround, unknown: number, by: number): FitGround {
   const place = ground.places[unknown]!;
-  const size = ground.constants.length;
-  const constants = ground.constants.slice();
+  const size = ground.parameters.length;
+  const parameters = ground.parameters.slice();
   const initial = ground.initial.slice();
   if (place >= size) initial[place - size] = initial[place - size]! + by;
-  else if (place >= 0) constants[place] = constants[place]! + by;
-  return { ...ground, constants, initial };
+  else if (place >= 0) parameters[place] = parameters[place]! + by;
+  return { ...ground, parameters, initial };
 }

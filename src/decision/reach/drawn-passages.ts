@@ -19,14 +19,14 @@ export function drawnPassages(
   const watched = group.passages.find(
     (each) => each.state === state && each.value === value && each.direction === direction,
   );
-  const kept = margin === "constants" ? group.draws.mean[place] : group.draws.future[place];
+  const kept = margin === "parameters" ? group.ensemble.mean[place] : group.ensemble.future[place];
   if (kept === undefined) {
     if (watched === undefined) throw refuseNotWatched(state, value, direction);
     return watched.at.slice().sort();
   }
   const length = group.index.length;
-  const curved = smooth && margin === "constants";
-  return Float64Array.from({ length: group.draws.paths }, (_, path) => {
+  const curved = smooth && margin === "parameters";
+  return Float64Array.from({ length: group.ensemble.paths }, (_, path) => {
     const at = crossing(kept, path * length, length, value, direction, curved);
     return at === undefined ? Number.POSITIVE_INFINITY : at.between;
   }).sort();

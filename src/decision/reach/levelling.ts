@@ -14,10 +14,13 @@ export function levelling(
   const value = central[central.length - 1]!;
   const before = central[central.length - 2]!;
   if (!(Math.abs(value - before) <= still * Math.abs(value))) return undefined;
-  const draws = group.draws.mean[place];
+  const draws = group.ensemble.mean[place];
   if (draws === undefined) return { value, lower: value, upper: value };
   const rows = group.index.length;
-  const ends = Float64Array.from({ length: group.draws.paths }, (_, path) => draws[path * rows + rows - 1]!)
+  const ends = Float64Array.from(
+    { length: group.ensemble.paths },
+    (_, path) => draws[path * rows + rows - 1]!,
+  )
     .filter(Number.isFinite)
     .sort();
   return { value, lower: quantile(ends, (1 - level) / 2), upper: quantile(ends, (1 + level) / 2) };

@@ -171,10 +171,10 @@ function condition(ahead: Ahead): string {
 
 function marginWords({ margin }: ReachQuestion, { draws, time }: Answer): string {
   if (draws === 1 || time === undefined) return "";
-  if (margin === "constants")
-    return " The margin is that of the fitted constants, not of a further reading's error.";
-  if (margin === "random change") return " The margin is that of the random change, at the given constants.";
-  return " The margin is that of the fitted constants and of chance from period to period.";
+  if (margin === "parameters")
+    return " The margin is that of the fitted parameters, not of a further reading's error.";
+  if (margin === "random change") return " The margin is that of the random change, at the given parameters.";
+  return " The margin is that of the fitted parameters and of chance from period to period.";
 }
 
 function fitOf(ahead: Ahead): Forecast["fit"] | undefined {

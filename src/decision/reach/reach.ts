@@ -3,7 +3,7 @@ import type { AcrossUnits } from "./across-units.js";
 import type { DeltaMargin } from "./delta-margin.js";
 
 /** The question: when does a state get to a value? */
-export interface ReachOptions {
+export interface TimeToReachOptions {
   /** Default: the only state. */
   readonly state?: string;
   /** In the state's unit. */
@@ -59,8 +59,8 @@ export interface GroupReach {
 }
 
 /** When a state reaches a value, with its margin. */
-export interface Reach {
-  readonly kind: "reach";
+export interface TimeToReach {
+  readonly kind: "time-to-reach";
   /** The rule's text. */
   readonly rule: string;
   readonly state: string;
@@ -70,7 +70,7 @@ export interface Reach {
   readonly direction: Direction;
   readonly level: number;
   /** What the margin carries. */
-  readonly margin: "constants" | "constants and process errors" | "random change";
+  readonly margin: "parameters" | "parameters and process errors" | "random change";
   readonly groups: readonly GroupReach[];
   /** Where asked for: over the units of the record, their mean, and a new unit. */
   readonly across: AcrossUnits | undefined;
@@ -78,4 +78,4 @@ export interface Reach {
 }
 
 /** A question with its defaults filled in. */
-export type ReachQuestion = Omit<Reach, "kind" | "groups" | "across" | "sentence">;
+export type ReachQuestion = Omit<TimeToReach, "kind" | "groups" | "across" | "sentence">;

@@ -4,7 +4,7 @@ import { centralPath, fittedNoise, type Ground, noiseDraw } from "../../projecti
 import { drawnGrounds } from "../setting/setting-margin.js";
 import { type Standing, standingOf } from "../setting/standing.js";
 
-/** Constants drawn from a fit, with what each says of readings to come; values on the fitting scale. */
+/** Parameters drawn from a fit, with what each says of readings to come; values on the fitting scale. */
 export interface ImaginedReadings {
   readonly standing: Standing;
   readonly grounds: readonly Ground[];
@@ -26,11 +26,11 @@ export interface ImagineOptions {
   readonly seed: number;
 }
 
-/** Draws constants of a fit and runs each as far as readings may be taken. */
+/** Draws parameters of a fit and runs each as far as readings may be taken. */
 export function imaginedReadings(fit: Fit, options: ImagineOptions): ImaginedReadings {
   const { state, draws, replicates, seed, group, periods } = options;
   const standing = standingOf(fit, { periods, seed, ...(group !== undefined && { group }) });
-  const logarithm = fit.options.spread === "proportional";
+  const logarithm = fit.options.distribution === "lognormal";
   const scale = (value: number): number => (logarithm ? Math.log(value) : value);
   const grounds = drawnGrounds(standing, draws);
   const centres = grounds.map((ground) => Float64Array.from(centralPath(ground).values[state]!, scale));
@@ -61,7 +61,7 @@ function processScatter(
   grounds.forEach((ground, k) => {
     const at = ground.initial.slice();
     for (let t = 1; t < rows; t++) {
-      ground.compiled.step(at, ground.constants, ground.inputs, ground.from + t - 1, at);
+      ground.compiled.step(at, ground.parameters, ground.inputs, ground.from + t - 1, at);
       for (let s = 0; s < draws.length; s++) at[s] = draws[s]?.(at[s]!, stream) ?? at[s]!;
       offsets[t]![k] = scale(at[state]!) - centres[k]![t]!;
     }

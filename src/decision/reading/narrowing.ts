@@ -14,7 +14,7 @@ const imagined = 200;
 
 /**
  * Expected width of an answer's interval after a reading at a row, by weighing: each imagined reading, drawn from one draw of
- * the constants, weighs all draws by how well they foretell it.
+ * the parameters, weighs all draws by how well they foretell it.
  *
  * @param answers - [draws]; on the log scale where all are positive and they spread over more than a factor of three.
  * @see Chaloner and Verdinelli (1995), Bayesian experimental design: a review, Statistical Science 10:273.

@@ -13,7 +13,7 @@ export interface NextReadingOptions {
   /** Periods beyond the record up to which a reading could be taken, and up to which the answer looks. */
   readonly periods: number;
   /** Times at which it could be taken, in the unit of the period column; default every period from the first on. */
-  readonly when?: readonly number[] | { readonly from: number; readonly to: number };
+  readonly values?: readonly number[] | { readonly from: number; readonly to: number };
   /** The answer whose margin is to be narrowed; needed for a single fit. */
   readonly answer?: Measure;
   /** What is read; default the first state. */
@@ -24,8 +24,8 @@ export interface NextReadingOptions {
   readonly cost?: (time: number) => number;
   /** Of fits with several groups: which one. */
   readonly group?: string;
-  /** Drawn constants; default 1000. */
-  readonly draws?: number;
+  /** Drawn parameters; default 1000. */
+  readonly paths?: number;
   /** Default 1. */
   readonly seed?: number;
 }
@@ -52,24 +52,24 @@ export interface NextReading {
   readonly periodUnit: string;
   /** By time. */
   readonly choices: readonly ReadingChoice[];
-  readonly best: ReadingChoice;
+  readonly recommended: ReadingChoice;
   readonly sentence: string;
 }
 
 /**
  * When a further reading would help most: to narrow a named answer, or to tell rival rules apart.
  *
- * Constants are drawn from each fit, a reading is imagined at each time from one of the draws, and the draws are
+ * Parameters are drawn from each fit, a reading is imagined at each time from one of the draws, and the draws are
  * weighed by how well they foretell it. Nothing is refitted; the Monte-Carlo error is given with each gain.
  *
  * @param fits - one fit with `answer`, or several fits of the same record.
  * @throws {ModelError} `no-purpose` | `no-candidate` | `unknown-state` | `risk-not-smooth` | `future-input-missing`.
- * @example nextReading(fitted, { periods: 10, answer: { constant: "K" } }).purpose // "narrow the answer"
+ * @example nextReading(fitted, { periods: 10, answer: { parameter: "K" } }).purpose // "narrow the answer"
  */
 export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOptions): NextReading {
   const all = [fits].flat() as readonly Fit[];
   const [first] = all;
-  const { answer, replicates = 1, seed = 1, draws = 1000, periods, cost = () => 1 } = options;
+  const { answer, replicates = 1, seed = 1, paths: draws = 1000, periods, cost = () => 1 } = options;
   if (first === undefined || (all.length === 1 && answer === undefined)) throw refuseNoPurpose();
   if (answer !== undefined && isRisk(answer)) throw refuseRiskObjective();
   const state = options.state ?? first.rule.states[0]!;
@@ -81,7 +81,7 @@ export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOpti
   });
   const separating = answer === undefined;
   const look = separating ? separationLook(rivals, seed) : narrowingLook(rivals[0]!, answer, seed);
-  const choices = candidates(rivals, options.when).map(({ time, rows }): ReadingChoice => {
+  const choices = candidates(rivals, options.values).map(({ time, rows }): ReadingChoice => {
     const { gain, error, telling } = look(rows);
     const price = cost(time);
     return { time, gain, error, telling, cost: price, worth: gain / price };
@@ -94,7 +94,7 @@ export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOpti
     replicates,
     periodUnit: standing.periodUnit,
     choices: Object.freeze(choices),
-    best,
+    recommended: best,
   };
   const about = separating ? "" : measureWords(answer, standing);
   return Object.freeze({ kind: "next-reading", ...found, sentence: sentenceOf(found, about, rivals.length) });
@@ -136,7 +136,7 @@ function levelled(answers: Float64Array): Float64Array {
 /** Times with their rows in every rival's path, where all of them have one. */
 function candidates(
   rivals: readonly ImaginedReadings[],
-  when: NextReadingOptions["when"],
+  when: NextReadingOptions["values"],
 ): readonly { readonly time: number; readonly rows: readonly number[] }[] {
   const { standing } = rivals[0]!;
   const process = rivals.some((rival) => rival.standing.fit!.options.errors !== "observation");
@@ -163,7 +163,7 @@ function rowAt({ standing }: ImaginedReadings, time: number): number {
 }
 
 function sentenceOf(found: Omit<NextReading, "kind" | "sentence">, about: string, rules: number): string {
-  const { best, replicates, periodUnit, state, purpose, choices } = found;
+  const { recommended: best, replicates, periodUnit, state, purpose, choices } = found;
   const what = replicates === 1 ? `A reading of ${state}` : `${replicates} readings of ${state}`;
   const at = `at ${amount(`${periodUnit} ${plain(best.time, 6)}`, "")}`;
   const among = `of the ${choices.length} times looked at`;

@@ -15,7 +15,7 @@ const imagined = 300;
 
 /**
  * Expected evidence of a reading at a row: it is imagined under each rule in turn, and its density under every rule is
- * the mean over that rule's drawn constants.
+ * the mean over that rule's drawn parameters.
  *
  * @see Box and Hill (1967), Discrimination among mechanistic models, Technometrics 9:57.
  */

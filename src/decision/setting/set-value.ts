@@ -1,11 +1,11 @@
 import type { Ground, InputPlan } from "../../projection/index.js";
 import { type Standing, stateOf } from "./standing.js";
 
-/** Something that can be set: a constant, a first value "N[0]", or the usual level of an input. */
+/** Something that can be set: a parameter, a first value "N[0]", or the usual level of an input. */
 export interface Setting {
   readonly name: string;
-  readonly role: "constant" | "initial" | "input";
-  /** Its place among constants or in the state vector; -1 for an input. */
+  readonly role: "parameter" | "initial" | "input";
+  /** Its place among parameters or in the state vector; -1 for an input. */
   readonly slot: number;
   /** What it is now; undefined for an input without a plan of one level. */
   readonly now: number | undefined;
@@ -19,16 +19,16 @@ const open: readonly [number, number] = [Number.NEGATIVE_INFINITY, Number.POSITI
 /** Finds what a name sets. */
 export function settingOf(standing: Standing, name: string): Setting {
   const { rule, ground } = standing;
-  const constant = rule.constants.indexOf(name);
+  const parameter = rule.parameters.indexOf(name);
   const bounds = standing.fit?.options.bounds?.[name] ?? rule.bounds[name] ?? open;
-  if (constant >= 0)
+  if (parameter >= 0)
     return {
       name,
-      role: "constant",
-      slot: constant,
+      role: "parameter",
+      slot: parameter,
       bounds,
-      now: ground.constants[constant]!,
-      at: (value, base = ground) => ({ ...base, constants: replaced(base.constants, constant, value) }),
+      now: ground.parameters[parameter]!,
+      at: (value, base = ground) => ({ ...base, parameters: replaced(base.parameters, parameter, value) }),
     };
   const state = rule.states.indexOf(stateOf(name));
   if (state >= 0)

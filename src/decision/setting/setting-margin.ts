@@ -9,7 +9,7 @@ import type { Standing } from "./standing.js";
 const draws = 400;
 
 /**
- * The setting that meets the target at drawn constants, draw by draw; undefined for a rule, whose constants are given.
+ * The setting that meets the target at drawn parameters, draw by draw; undefined for a rule, whose parameters are given.
  */
 export function settingMargin(
   standing: Standing,
@@ -43,7 +43,7 @@ export function drawnGrounds(standing: Standing, count: number): readonly Ground
   const width = ground.initial.length;
   return Array.from({ length: count }, (_, path) => ({
     ...ground,
-    constants: starts.constants.slice(path * starts.size, (path + 1) * starts.size),
+    parameters: starts.parameters.slice(path * starts.size, (path + 1) * starts.size),
     initial: starts.initial.slice(path * width, (path + 1) * width),
   }));
 }

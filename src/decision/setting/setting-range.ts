@@ -15,7 +15,7 @@ export function withUnplanned<T extends StandingOptions>(
 ): T {
   const { inputs = {} } = options;
   const rule = isFit(subject) ? subject.rule : subject;
-  const settable = [...rule.constants, ...rule.states.map((state) => `${state}[0]`), ...rule.inputs];
+  const settable = [...rule.parameters, ...rule.states.map((state) => `${state}[0]`), ...rule.inputs];
   if (!settable.includes(name) && !rule.states.includes(stateOf(name)))
     throw refuseNoSuchSetting(name, settable);
   if (between === undefined || inputs[name] !== undefined || !rule.inputs.includes(name)) return options;

@@ -1,4 +1,4 @@
-import { constantsBySlot, type InitialValues, initialVector } from "../../dynamics/index.js";
+import { type InitialValues, initialVector, parametersBySlot } from "../../dynamics/index.js";
 import type { Fit } from "../../estimate/index.js";
 import {
   type FitGround,
@@ -22,8 +22,8 @@ export interface StandingOptions {
   readonly inputs?: InputPlans;
   /** Of a fit with several groups: which one. */
   readonly group?: string;
-  /** Of a rule: its constants and first values. */
-  readonly constants?: Readonly<Record<string, number>>;
+  /** Of a rule: its parameters and first values. */
+  readonly parameters?: Readonly<Record<string, number>>;
   readonly initial?: InitialValues;
   /** Of a rule: random change by state, for risks. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
@@ -98,12 +98,12 @@ function fitStanding(fit: Fit, options: StandingOptions): Standing {
 
 function ruleStanding(rule: Rule, options: StandingOptions): Standing {
   const { periods } = options;
-  const constants = constantsBySlot(rule, options.constants);
+  const parameters = parametersBySlot(rule, options.parameters);
   const initial = initialVector(rule, options.initial);
   const compiled = compileRule(rule);
   const planned = (plans: InputPlans): Ground => {
     const inputs = plannedInputs(rule, plans, { recorded: () => [], rows: 0, last: periods, firstNumber: 0 });
-    return { rule, compiled, constants, initial, inputs, from: 0, periods };
+    return { rule, compiled, parameters, initial, inputs, from: 0, periods };
   };
   return {
     rule,
@@ -112,7 +112,7 @@ function ruleStanding(rule: Rule, options: StandingOptions): Standing {
     fitGround: undefined,
     present: 0,
     timeAt: (row) => row + (options.startsAt ?? 0),
-    change: ruleNoise(rule, constants, options.noise),
+    change: ruleNoise(rule, parameters, options.noise),
     plans: options.inputs ?? {},
     paths: options.paths ?? 2000,
     seed: options.seed ?? 1,

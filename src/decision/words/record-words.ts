@@ -26,7 +26,7 @@ export function conditionWords(rule: Rule, fit: Fit | undefined): string {
   const short = rule.text.length <= longest && !rule.text.includes("\n");
   if (fit !== undefined)
     return `${planned}it goes on as in ${recordWords(fit)}${short ? `, by the rule ${rule.text}` : ""}`;
-  return `${planned}the rule${short ? ` ${rule.text}` : ""}${rule.constants.length === 0 ? " holds" : " and its constants hold"}`;
+  return `${planned}the rule${short ? ` ${rule.text}` : ""}${rule.parameters.length === 0 ? " holds" : " and its parameters hold"}`;
 }
 
 /** How a group is named: "flask B", or "N" where there is a single one. */

@@ -1,11 +1,11 @@
 import { formula, type Rule } from "../../rule/index.js";
 import { fromDecimal } from "../exact/rational.js";
-import { type GuaranteedDigits, guaranteedDigits } from "../path/guaranteed-digits.js";
-import { path } from "../path/path.js";
 import { noClosedForm } from "../refusals.js";
 import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.js";
 import { type InitialValues, initialVector } from "../setting/setting.js";
 import { namedValues, refuseOutsideRange } from "../setting/valid-range.js";
+import { type GuaranteedDigits, guaranteedDigits } from "../trajectory/guaranteed-digits.js";
+import { trajectory } from "../trajectory/trajectory.js";
 import { type ClosedTerm, closedTerms, termsAt } from "./closed-terms.js";
 import { linearStep } from "./exact-matrix.js";
 import type { ClosedRoot } from "./polynomial-roots.js";
@@ -21,10 +21,10 @@ export interface ClosedFormOptions extends HeldSetting {
 export interface ClosedForm {
   readonly kind: "closed-form";
   readonly rule: Rule;
-  readonly constants: Readonly<Record<string, number>>;
+  readonly parameters: Readonly<Record<string, number>>;
   /** `linear` = from the roots of the step; `named` = known of the rule from the catalogue. */
   readonly method: "linear" | "named";
-  /** By state: text in the rule language, with t, constants and first values (N0) where it is a named one. */
+  /** By state: text in the rule language, with t, parameters and first values (N0) where it is a named one. */
   readonly formulas: Readonly<Record<string, string>>;
   /** By state. */
   readonly tex: Readonly<Record<string, string>>;
@@ -46,15 +46,15 @@ function byState<T>(rule: Rule, of: (slot: number) => T): Readonly<Record<string
   return Object.freeze(Object.fromEntries(rule.states.map((name, slot) => [name, of(slot)])));
 }
 
-function common(held: HeldStep): Pick<Draft, "kind" | "rule" | "constants"> {
-  const { rule, constants } = held;
-  return { kind: "closed-form", rule, constants: namedValues(rule, constants, undefined) };
+function common(held: HeldStep): Pick<Draft, "kind" | "rule" | "parameters"> {
+  const { rule, parameters } = held;
+  return { kind: "closed-form", rule, parameters: namedValues(rule, parameters, undefined) };
 }
 
 function namedForm(held: HeldStep, initial: Float64Array): Draft | undefined {
   const { rule } = held;
   const inputs = Object.fromEntries(rule.inputs.map((name, i) => [name, held.inputs[i]!]));
-  const given = Object.freeze({ ...namedValues(rule, held.constants, initial), ...inputs });
+  const given = Object.freeze({ ...namedValues(rule, held.parameters, initial), ...inputs });
   const found = rule.named?.closedForms.find(
     ({ when, values }) =>
       rule.states.every((state) => state in values) &&
@@ -111,7 +111,7 @@ function agreementOf(
   guaranteed: GuaranteedDigits,
 ): ClosedForm["agreement"] {
   const periods = Math.min(40, Math.max(1, guaranteed.periods));
-  const run = path(draft.rule, { ...options, periods });
+  const run = trajectory(draft.rule, { ...options, periods });
   let largest = 0;
   for (let t = 0; t <= run.periods; t++) {
     for (const [state, value] of Object.entries(closedFormAt(draft, t))) {
@@ -129,13 +129,13 @@ function agreementOf(
  * characteristic polynomial, found over exact fractions, so that repeated roots are known to be repeated. Rules of
  * the catalogue give the form that is known of them. Every form is compared with stepping.
  *
- * @throws {ModelError} `no-closed-form` where none is known; `outside-range` where the constants do not fit the rule.
+ * @throws {ModelError} `no-closed-form` where none is known; `outside-range` where the parameters do not fit the rule.
  * @example closedForm(recurrence("x[t+1] = 6*x - 9*x[t-1]"), { initial: { x: [0, 1] } }).roots[0].exact; // "3"
  */
 export function closedForm(rule: Rule, options: ClosedFormOptions = {}): ClosedForm {
   const held = holdStep(rule, options, "closed form");
   const initial = initialVector(rule, options.initial);
-  refuseOutsideRange(rule, namedValues(rule, held.constants, initial));
+  refuseOutsideRange(rule, namedValues(rule, held.parameters, initial));
   const draft = namedForm(held, initial) ?? linearForm(held, initial);
   if (draft === undefined) throw noClosedForm(rule.named?.title ?? "This rule");
   const guaranteed = guaranteedDigits(rule, options);

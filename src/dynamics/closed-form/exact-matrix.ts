@@ -40,7 +40,7 @@ function inFractions(held: HeldStep): LinearStep {
   const inputs = Array.from(held.inputs, fromDecimal);
   const place = {
     state: new Array<Rational>(width).fill(rational(0n)),
-    constants: Array.from(held.constants, fromDecimal),
+    parameters: Array.from(held.parameters, fromDecimal),
     input: (slot: number): Rational => inputs[slot]!,
     t: rational(0n),
   };

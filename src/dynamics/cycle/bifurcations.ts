@@ -7,24 +7,22 @@ import { type Followed, followCycle, settleInCycle } from "./follow-cycle.js";
 import { followRestLevel } from "./follow-rest-level.js";
 
 export interface BifurcationsOptions extends HeldSetting {
-  /** The constant that is varied. */
-  readonly constant: string;
-  /** Followed from here ... */
-  readonly from: number;
-  /** ... to here, up or down. */
-  readonly to: number;
+  /** The parameter that is varied. */
+  readonly vary: string;
+  /** Followed from the first value to the second, up or down. */
+  readonly range: readonly [number, number];
   /**
    * First value from which the cycle to be followed is reached; for a system a value by state, near the rest level
    * to be followed.
    */
-  readonly start: number | Readonly<Record<string, number>>;
+  readonly initial: number | Readonly<Record<string, number>>;
   /** At most so many places; default 8. */
-  readonly most?: number;
+  readonly limit?: number;
 }
 
-/** A value of a constant at which what is stable changes. */
+/** A value of a parameter at which what is stable changes. */
 export interface Bifurcation {
-  /** Value of the constant. */
+  /** Value of the parameter. */
   readonly at: number;
   /**
    * `flip`: a cycle of twice the period takes over; `fold`: it meets an unstable one and both vanish;
@@ -40,10 +38,10 @@ export interface Bifurcation {
 export interface Bifurcations {
   readonly kind: "bifurcations";
   readonly rule: Rule;
-  readonly constant: string;
+  readonly vary: string;
   readonly places: readonly Bifurcation[];
-  /** Why the following ended: `range` done, `most` found, or nothing to follow any more. */
-  readonly stop: "range" | "most" | "no-cycle";
+  /** Why the following ended: `range` done, `limit` found, or nothing to follow any more. */
+  readonly stop: "range" | "limit" | "no-cycle";
 }
 
 interface Walk {
@@ -58,7 +56,7 @@ interface Here {
 }
 
 function cycleAt({ held, slot }: Walk, at: number, near: readonly number[]): Followed | undefined {
-  held.constants[slot] = at;
+  held.parameters[slot] = at;
   return followCycle(held, near);
 }
 
@@ -92,7 +90,7 @@ function march(walk: Walk, here: Here, step: number): March {
 /** The stable cycle a little past a place, on which the walk goes on. */
 function beyond(walk: Walk, place: Bifurcation, gap: number): Here | undefined {
   const at = place.at + gap;
-  walk.held.constants[walk.slot] = at;
+  walk.held.parameters[walk.slot] = at;
   const cycle = settleInCycle(walk.held, place.points[0]! * (1 + 1e-6) + 1e-12);
   if (cycle === undefined || Math.abs(cycle.slope) >= 1) return undefined;
   return { at, cycle };
@@ -111,7 +109,7 @@ function nextPlace(walk: Walk, from: Here, step: number): Bifurcation | Bifurcat
   return "range";
 }
 
-function follow(walk: Walk, start: Here, most: number): Pick<Bifurcations, "places" | "stop"> {
+function follow(walk: Walk, start: Here, limit: number): Pick<Bifurcations, "places" | "stop"> {
   const places: Bifurcation[] = [];
   let step = (walk.to - start.at) / 200;
   for (let here: Here | undefined = start; here !== undefined; ) {
@@ -119,7 +117,7 @@ function follow(walk: Walk, start: Here, most: number): Pick<Bifurcations, "plac
     if (typeof place === "string") return { places, stop: place };
     const last = places.at(-1);
     places.push(place);
-    if (places.length >= most) return { places, stop: "most" };
+    if (places.length >= limit) return { places, stop: "limit" };
     // A cascade shrinks by about 4.669 from one doubling to the next, so steps shrink with it.
     if (last !== undefined && place.kind === "flip") step = (place.at - last.at) / 40;
     here = beyond(walk, place, step);
@@ -128,14 +126,14 @@ function follow(walk: Walk, start: Here, most: number): Pick<Bifurcations, "plac
 }
 
 /** First values by state: one number serves a rule of one state. */
-function startOf(rule: Rule, start: BifurcationsOptions["start"]): Float64Array {
+function startOf(rule: Rule, start: BifurcationsOptions["initial"]): Float64Array {
   if (typeof start === "number") {
-    if (rule.states.length > 1) throw unreadableOption("start", "a value for every state", start);
+    if (rule.states.length > 1) throw unreadableOption("initial", "a value for every state", start);
     return Float64Array.of(start);
   }
   return Float64Array.from(rule.states, (state) => {
     const value = start[state];
-    if (value === undefined) throw missingValue("start of", state, Object.keys(start));
+    if (value === undefined) throw missingValue("initial value of", state, Object.keys(start));
     return value;
   });
 }
@@ -144,39 +142,40 @@ function followedCycle(
   walk: Walk,
   from: number,
   start: number,
-  most: number,
+  limit: number,
 ): Pick<Bifurcations, "places" | "stop"> {
   const cycle = settleInCycle(walk.held, start);
-  return cycle === undefined ? { places: [], stop: "no-cycle" } : follow(walk, { at: from, cycle }, most);
+  return cycle === undefined ? { places: [], stop: "no-cycle" } : follow(walk, { at: from, cycle }, limit);
 }
 
 /**
- * Follows what is stable while a constant is varied, and finds where it loses its hold: of a rule of one state, the
+ * Follows what is stable while a parameter is varied, and finds where it loses its hold: of a rule of one state, the
  * root of a cycle's multiplier at -1 (period doubling, on to the next cycle) or the meeting of two cycles at +1; of a
  * system or a rule with lags, the root at modulus 1 of a rest level's leading multiplier. Never a place read off a
  * picture.
  *
  * @throws {ModelError} `unknown-name` | `missing-value` | `unreadable-option` | `rule-changes-with-time`.
- * @example bifurcations(recurrence("x[t+1] = r*x*(1 - x)"), { constant: "r", from: 2.8, to: 3.3, start: 0.3 }).places[0].at.toFixed(9); // "3.000000000"
+ * @example bifurcations(recurrence("x[t+1] = r*x*(1 - x)"), { vary: "r", range: [2.8, 3.3], initial: 0.3 }).places[0].at.toFixed(9); // "3.000000000"
  */
 export function bifurcations(rule: Rule, options: BifurcationsOptions): Bifurcations {
-  const { constant, from, to, most = 8 } = options;
-  const slot = rule.constants.indexOf(constant);
-  if (slot < 0) throw strangeName("constant", constant, rule.constants);
+  const { vary, range, limit = 8 } = options;
+  const [from, to] = range;
+  const slot = rule.parameters.indexOf(vary);
+  if (slot < 0) throw strangeName("parameter", vary, rule.parameters);
   if (!Number.isFinite(from) || !Number.isFinite(to) || from === to) {
-    throw unreadableOption("to", `a number other than from, ${from}`, to);
+    throw unreadableOption("range", "two different finite numbers, as in [2.8, 3.3]", range);
   }
-  const setting = { ...options, constants: { ...options.constants, [constant]: from } };
+  const setting = { ...options, parameters: { ...options.parameters, [vary]: from } };
   const held = holdStep(rule, setting, "bifurcation");
-  const start = startOf(rule, options.start);
+  const start = startOf(rule, options.initial);
   const found =
     held.width === 1
-      ? followedCycle({ held, slot, to }, from, start[0]!, most)
-      : followRestLevel(held, slot, { from, to }, start, most);
+      ? followedCycle({ held, slot, to }, from, start[0]!, limit)
+      : followRestLevel(held, slot, { from, to }, start, limit);
   return Object.freeze({
     kind: "bifurcations",
     rule,
-    constant,
+    vary,
     places: Object.freeze(found.places),
     stop: found.stop,
   });

@@ -23,8 +23,8 @@ export interface Cycles {
   readonly kind: "cycles";
   readonly rule: Rule;
   readonly period: number;
-  readonly constants: Readonly<Record<string, number>>;
-  readonly within: Interval;
+  readonly parameters: Readonly<Record<string, number>>;
+  readonly range: Interval;
   readonly cycles: readonly Cycle[];
   /** `every` = none in the range can be missing; `cut-short` = the search ran out of patience. */
   readonly search: "every" | "cut-short";
@@ -33,8 +33,8 @@ export interface Cycles {
 export interface CyclesOptions extends HeldSetting {
   /** Periods until the values come round; a whole number from 1. */
   readonly period: number;
-  /** Default: the rule's bounds, else a million times the largest constant either way. */
-  readonly within?: SearchRange;
+  /** Default: the rule's bounds, else a million times the largest parameter either way. */
+  readonly range?: SearchRange;
 }
 
 const shown = (value: number): string => String(Number(value.toPrecision(6)));
@@ -67,7 +67,7 @@ function described(held: HeldStep, points: readonly number[]): Cycle {
  * ones are found too, and none in the range is lost.
  *
  * @throws {ModelError} `period-missing` | `one-state-only` | `unreadable-option` | `missing-value` | `rule-changes-with-time`.
- * @example cycles(recurrence("x[t+1] = 3.2*x*(1 - x)"), { period: 2, within: [0, 1] }).cycles[0].multiplier.re.toFixed(6); // "0.160000"
+ * @example cycles(recurrence("x[t+1] = 3.2*x*(1 - x)"), { period: 2, range: [0, 1] }).cycles[0].multiplier.re.toFixed(6); // "0.160000"
  */
 export function cycles(rule: Rule, options: CyclesOptions): Cycles {
   const period = options?.period;
@@ -77,14 +77,16 @@ export function cycles(rule: Rule, options: CyclesOptions): Cycles {
     throw unreadableOption("period", "a whole number from 1 to 64", period);
   }
   const held = holdStep(rule, options, "cycle");
-  const within = searchRanges(rule, held.constants, options.within)[0]!;
+  const within = searchRanges(rule, held.parameters, options.range)[0]!;
   const found = cyclesOfOneState(held, period, within);
   return Object.freeze({
     kind: "cycles",
     rule,
     period,
-    constants: Object.freeze(Object.fromEntries(rule.constants.map((name, i) => [name, held.constants[i]!]))),
-    within,
+    parameters: Object.freeze(
+      Object.fromEntries(rule.parameters.map((name, i) => [name, held.parameters[i]!])),
+    ),
+    range: within,
     cycles: Object.freeze(found.cycles.map((points) => described(held, points))),
     search: found.complete ? "every" : "cut-short",
   });

@@ -2,7 +2,7 @@ import type { HeldStep } from "../setting/held-step.js";
 import { orbit } from "./cycle-points.js";
 
 /**
- * Where two cycles of a period meet and vanish: solves f^p(x) = x and slope = 1 together for x and the constant,
+ * Where two cycles of a period meet and vanish: solves f^p(x) = x and slope = 1 together for x and the parameter,
  * by Newton's method with central differences, from a cycle near that place.
  */
 export function foldPlace(
@@ -12,7 +12,7 @@ export function foldPlace(
 ): { readonly points: readonly number[]; readonly at: number } | undefined {
   const period = near.points.length;
   const gaps = (x: number, at: number): readonly [number, number] => {
-    held.constants[slot] = at;
+    held.parameters[slot] = at;
     const state = Float64Array.of(x);
     let slope = 1;
     let value = x;
@@ -41,6 +41,6 @@ export function foldPlace(
   }
   const [f, g] = gaps(x, at);
   const settled = Math.abs(f) <= 1e-9 * Math.max(Math.abs(x), 1e-9) && Math.abs(g) <= 1e-5;
-  held.constants[slot] = at;
+  held.parameters[slot] = at;
   return settled ? { points: orbit(held, x, period), at } : undefined;
 }

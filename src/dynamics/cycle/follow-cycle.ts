@@ -1,7 +1,7 @@
 import type { HeldStep } from "../setting/held-step.js";
 import { orbit, polishCycle } from "./cycle-points.js";
 
-/** A cycle at one value of a constant, with the product of its slopes. */
+/** A cycle at one value of a parameter, with the product of its slopes. */
 export interface Followed {
   readonly points: readonly number[];
   readonly slope: number;
@@ -21,7 +21,7 @@ function slopeAlong(held: HeldStep, points: readonly number[]): { slope: number;
   return { slope, residual };
 }
 
-/** The cycle near given points at the constants as they are now; undefined where it is gone. */
+/** The cycle near given points at the parameters as they are now; undefined where it is gone. */
 export function followCycle(held: HeldStep, near: readonly number[]): Followed | undefined {
   const points = polishCycle(held, near);
   const { slope, residual } = slopeAlong(held, points);

@@ -4,7 +4,7 @@ import { settleByNewton } from "../rest/settle-by-newton.js";
 import { type HeldStep, settled } from "../setting/held-step.js";
 import type { Bifurcation, Bifurcations } from "./bifurcations.js";
 
-/** A rest level at one value of a constant, with its leading multiplier. */
+/** A rest level at one value of a parameter, with its leading multiplier. */
 interface Level {
   readonly at: number;
   readonly present: Float64Array;
@@ -12,7 +12,7 @@ interface Level {
 }
 
 function levelAt(held: HeldStep, slot: number, at: number, near: Float64Array): Level | undefined {
-  held.constants[slot] = at;
+  held.parameters[slot] = at;
   const present = settleByNewton(held, near);
   if (present === undefined) return undefined;
   const { matrix } = held.slopes(settled(held.rule, present));
@@ -50,7 +50,7 @@ export function followRestLevel(
     const next = levelAt(held, slot, range.from + ((range.to - range.from) * k) / steps, here.present);
     if (next !== undefined && here.leading.modulus < 1 !== next.leading.modulus < 1) {
       places.push(crossing(held, slot, here, next));
-      if (places.length >= most) return { places, stop: "most" };
+      if (places.length >= most) return { places, stop: "limit" };
     }
     here = next;
   }

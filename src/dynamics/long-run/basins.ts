@@ -6,9 +6,9 @@ import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.
 
 export interface BasinsOptions extends HeldSetting {
   /** First values to look at. */
-  readonly within: Interval;
+  readonly range: Interval;
   /** Starts tried before borders are narrowed down; default 400. */
-  readonly starts?: number;
+  readonly count?: number;
   /** Periods until a start is taken to have arrived; default 3,000. */
   readonly periods?: number;
   /** What is known of the first value: normal with this mean and standard deviation. */
@@ -28,7 +28,7 @@ export interface Basin {
 export interface Basins {
   readonly kind: "basins";
   readonly rule: Rule;
-  readonly within: Interval;
+  readonly range: Interval;
   readonly basins: readonly Basin[];
   /** First values at which the basin changes. */
   readonly borders: readonly number[];
@@ -83,10 +83,10 @@ function probabilityOf(
  * ends.
  *
  * @throws {ModelError} `one-state-only` | `unreadable-option` | `missing-value` | `rule-changes-with-time`.
- * @example basins(rules.allee(), { constants: { r: 0.2, K: 100, A: 20 }, within: [0, 110] }).borders[0].toFixed(6); // "20.000000"
+ * @example basins(rules.allee(), { parameters: { r: 0.2, K: 100, A: 20 }, range: [0, 110] }).borders[0].toFixed(6); // "20.000000"
  */
 export function basins(rule: Rule, options: BasinsOptions): Basins {
-  const { within, starts = 400, periods = 3_000 } = options;
+  const { range: within, count: starts = 400, periods = 3_000 } = options;
   if (rule.states.length !== 1 || rule.memory.length > 0) throw oneStateOnly("A basin", rule.states);
   if (!(within[0] < within[1]))
     throw unreadableOption("within", "two numbers, lowest first", JSON.stringify(within));
@@ -121,7 +121,7 @@ export function basins(rule: Rule, options: BasinsOptions): Basins {
   return Object.freeze({
     kind: "basins",
     rule,
-    within,
+    range: within,
     basins: Object.freeze(list),
     borders: Object.freeze(borders),
   });

@@ -1,15 +1,13 @@
 import type { Rule } from "../../rule/index.js";
-import { path } from "../path/path.js";
 import { oneStateOnly } from "../refusals.js";
 import { type Equilibrium, equilibria } from "../rest/equilibria.js";
 import { type HeldSetting, holdStep } from "../setting/held-step.js";
+import { trajectory } from "../trajectory/trajectory.js";
 
 export interface CobwebOptions extends HeldSetting {
   readonly initial: Readonly<Record<string, number>>;
   /** Default 30. */
   readonly periods?: number;
-  /** Points of the curve; default 200. */
-  readonly points?: number;
 }
 
 /** Next value against present value, with the steps of one path between the curve and the line of no change. */
@@ -27,6 +25,9 @@ export interface Cobweb {
   readonly equilibria: readonly Equilibrium[];
 }
 
+/** Points of the curve: enough for a smooth line at page width. */
+const curvePoints = 200;
+
 /** Corners (x0, x0), (x0, x1), (x1, x1), (x1, x2), ... */
 function corners(values: Float64Array): Cobweb["web"] {
   const count = 2 * values.length - 1;
@@ -43,11 +44,11 @@ function corners(values: Float64Array): Cobweb["web"] {
  * @example cobweb(recurrence("x[t+1] = 0.5*x + 1"), { initial: { x: 0 }, periods: 2 }).web.y; // 0, 1, 1, 1.5, 1.5
  */
 export function cobweb(rule: Rule, options: CobwebOptions): Cobweb {
-  const { periods = 30, points = 200 } = options;
+  const { periods = 30 } = options;
   if (rule.states.length !== 1 || rule.memory.length > 0) throw oneStateOnly("A cobweb", rule.states);
   const held = holdStep(rule, options, "cobweb");
   const [state] = rule.states;
-  const run = path(rule, { ...options, periods });
+  const run = trajectory(rule, { ...options, periods });
   const values = run.values[state!]!;
   const least = values.reduce((low, value) => Math.min(low, value), Number.POSITIVE_INFINITY);
   const most = values.reduce((high, value) => Math.max(high, value), Number.NEGATIVE_INFINITY);
@@ -55,8 +56,8 @@ export function cobweb(rule: Rule, options: CobwebOptions): Cobweb {
   const lowest = least >= 0 ? Math.max(0, least - room) : least - room;
   const within = [lowest, most + room] as const;
   const present = Float64Array.from(
-    { length: points },
-    (_, i) => within[0] + ((within[1] - within[0]) * i) / (points - 1),
+    { length: curvePoints },
+    (_, i) => within[0] + ((within[1] - within[0]) * i) / (curvePoints - 1),
   );
   const stepped = (from: Float64Array): Float64Array =>
     from.map((x) => {
@@ -73,6 +74,6 @@ export function cobweb(rule: Rule, options: CobwebOptions): Cobweb {
     next,
     secondNext: stepped(next),
     web: corners(values),
-    equilibria: equilibria(rule, { ...options, within }).points,
+    equilibria: equilibria(rule, { ...options, range: within }).points,
   });
 }

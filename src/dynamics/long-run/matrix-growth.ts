@@ -56,7 +56,7 @@ function polished(matrix: Matrix, right: readonly number[], left: readonly numbe
  * @param rule - linear in its states without an amount added, as `rules.ages` and `rules.stages` give.
  * @throws {ModelError} `not-a-matrix-rule` | `missing-value`.
  * @see Caswell (2001), Matrix Population Models, chapters 4 and 9.
- * @example matrixGrowth(rules.ages({ ages: 3 }), { constants: { f1: 0, f2: 4, f3: 3, s1: 0.5, s2: 0.25 } }).dominant; // 1.5
+ * @example matrixGrowth(rules.ages({ ages: 3 }), { parameters: { f1: 0, f2: 4, f3: 3, s1: 0.5, s2: 0.25 } }).dominant; // 1.5
  */
 export function matrixGrowth(rule: Rule, setting: HeldSetting = {}): MatrixGrowth {
   const held = holdStep(rule, setting, "long run");

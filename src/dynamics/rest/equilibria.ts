@@ -23,9 +23,9 @@ export interface Equilibrium extends Stability {
 export interface Equilibria {
   readonly kind: "equilibria";
   readonly rule: Rule;
-  readonly constants: Readonly<Record<string, number>>;
+  readonly parameters: Readonly<Record<string, number>>;
   /** By state: the range searched. */
-  readonly within: Readonly<Record<string, Interval>>;
+  readonly range: Readonly<Record<string, Interval>>;
   readonly points: readonly Equilibrium[];
   /**
    * `every` = one state: the range was covered and none can be missing; `all-values` = one state: whatever the
@@ -34,14 +34,14 @@ export interface Equilibria {
    */
   readonly search: "every" | "all-values" | "many-starts" | "cut-short";
   /** Starts used, for a system. */
-  readonly starts: number;
+  readonly searches: number;
 }
 
 export interface EquilibriaOptions extends HeldSetting {
-  /** Default: the rule's bounds, else a million times the largest constant either way. */
-  readonly within?: SearchRange;
+  /** Default: the rule's bounds, else a million times the largest parameter either way. */
+  readonly range?: SearchRange;
   /** For systems: how many places the search starts from. Default 400. */
-  readonly starts?: number;
+  readonly searches?: number;
 }
 
 const shown = (value: number): string => String(Number(value.toPrecision(6)));
@@ -118,21 +118,23 @@ function ofSystem(held: HeldStep, within: readonly Interval[], starts: number): 
  *
  * @param options.inputs - by input, the value at which it is held.
  * @throws {ModelError} `missing-value` | `unknown-name` | `rule-changes-with-time` | `unreadable-option`.
- * @example equilibria(recurrence("ΔN = r*N*(1 - N/K)"), { constants: { r: 0.5, K: 1000 } }).points[1].at.N; // 1000
+ * @example equilibria(recurrence("ΔN = r*N*(1 - N/K)"), { parameters: { r: 0.5, K: 1000 } }).points[1].at.N; // 1000
  */
 export function equilibria(rule: Rule, options: EquilibriaOptions = {}): Equilibria {
   const held = holdStep(rule, options, "equilibrium");
-  const ranges = searchRanges(rule, held.constants, options.within);
+  const ranges = searchRanges(rule, held.parameters, options.range);
   const single = rule.states.length === 1;
-  const starts = single ? 0 : (options.starts ?? 400);
+  const starts = single ? 0 : (options.searches ?? 400);
   const found = single ? ofOneState(held, ranges[0]!) : ofSystem(held, ranges, starts);
   return Object.freeze({
     kind: "equilibria",
     rule,
-    constants: Object.freeze(Object.fromEntries(rule.constants.map((name, i) => [name, held.constants[i]!]))),
-    within: Object.freeze(Object.fromEntries(rule.states.map((name, i) => [name, ranges[i]!]))),
+    parameters: Object.freeze(
+      Object.fromEntries(rule.parameters.map((name, i) => [name, held.parameters[i]!])),
+    ),
+    range: Object.freeze(Object.fromEntries(rule.states.map((name, i) => [name, ranges[i]!]))),
     points: Object.freeze(found.points.map((point) => described(held, point))),
     search: found.search,
-    starts,
+    searches: starts,
   });
 }

@@ -1,18 +1,18 @@
 import { compileRule, inputReach, type Rule, readsPeriod } from "../../rule/index.js";
 import { changesWithTime } from "../refusals.js";
-import { constantsBySlot, heldInputs } from "./setting.js";
+import { heldInputs, parametersBySlot } from "./setting.js";
 
-/** Constants, and inputs held at one value, for questions about the long run. */
+/** Parameters, and inputs held at one value, for questions about the long run. */
 export interface HeldSetting {
-  readonly constants?: Readonly<Record<string, number>>;
+  readonly parameters?: Readonly<Record<string, number>>;
   /** By input: the value at which it stays. */
   readonly inputs?: Readonly<Record<string, number>>;
 }
 
-/** A rule that does the same in every period: its constants and inputs are held. */
+/** A rule that does the same in every period: its parameters and inputs are held. */
 export interface HeldStep {
   readonly rule: Rule;
-  readonly constants: Float64Array;
+  readonly parameters: Float64Array;
   readonly inputs: Float64Array;
   /** Length of the state vector, kept past values included. */
   readonly width: number;
@@ -29,17 +29,17 @@ export interface HeldStep {
 /** Periods that a leap may take. */
 const longestLeap = 64;
 
-/** Holds a rule's constants and inputs, or says why it cannot be held. */
+/** Holds a rule's parameters and inputs, or says why it cannot be held. */
 export function holdStep(rule: Rule, setting: HeldSetting, what: string): HeldStep {
   if (readsPeriod(rule)) throw changesWithTime(what);
-  const constants = constantsBySlot(rule, setting.constants);
+  const parameters = parametersBySlot(rule, setting.parameters);
   const inputs = heldInputs(rule, setting.inputs);
   const compiled = compileRule(rule);
   const width = rule.states.length + rule.memory.length;
   // Columns long enough for every period that a leap reads, with its first step in their middle.
   const reach = Math.max(0, ...inputReach(rule).flatMap(([earliest, latest]) => [-earliest, latest]));
   const columns = Array.from(inputs, (value) => new Float64Array(2 * reach + longestLeap).fill(value));
-  const unknowns = constants.length + width;
+  const unknowns = parameters.length + width;
   const values = new Float64Array(2 * width);
   const table = new Float64Array(2 * width * unknowns);
   const leapt = new Float64Array(width * width);
@@ -47,18 +47,18 @@ export function holdStep(rule: Rule, setting: HeldSetting, what: string): HeldSt
   /** Slopes of row `row` of a table of sensitivities by the first state vector. */
   const copySlopes = (from: Float64Array, row: number, to: Float64Array): void => {
     for (let i = 0; i < width; i++) {
-      const begin = (row * width + i) * unknowns + constants.length;
+      const begin = (row * width + i) * unknowns + parameters.length;
       for (let j = 0; j < width; j++) to[i * width + j] = from[begin + j]!;
     }
   };
   return {
     rule,
-    constants,
+    parameters,
     inputs,
     width,
-    step: (state, next) => compiled.step(state, constants, columns, reach, next),
+    step: (state, next) => compiled.step(state, parameters, columns, reach, next),
     slopes: (state) => {
-      compiled.pathWithSensitivities(state, constants, columns, reach, 1, values, table);
+      compiled.pathWithSensitivities(state, parameters, columns, reach, 1, values, table);
       const matrix = new Float64Array(width * width);
       copySlopes(table, 1, matrix);
       return { next: values.slice(width), matrix };
@@ -68,7 +68,7 @@ export function holdStep(rule: Rule, setting: HeldSetting, what: string): HeldSt
         longValues = new Float64Array((periods + 1) * width);
         longTable = new Float64Array((periods + 1) * width * unknowns);
       }
-      compiled.pathWithSensitivities(state, constants, columns, reach, periods, longValues, longTable);
+      compiled.pathWithSensitivities(state, parameters, columns, reach, periods, longValues, longTable);
       for (let i = 0; i < width; i++) state[i] = longValues[periods * width + i]!;
       copySlopes(longTable, periods, leapt);
       return leapt;

@@ -21,9 +21,9 @@ function bySlot(
   });
 }
 
-/** Constants by slot: those the rule holds fixed, and those given, which prevail. */
-export const constantsBySlot = (rule: Rule, given: Readonly<Record<string, number>> = {}): Float64Array =>
-  bySlot("constant", rule.constants, { ...rule.fixed, ...given });
+/** Parameters by slot: those the rule holds fixed, and those given, which prevail. */
+export const parametersBySlot = (rule: Rule, given: Readonly<Record<string, number>> = {}): Float64Array =>
+  bySlot("parameter", rule.parameters, { ...rule.fixed, ...given });
 
 /** Inputs by slot, each held at one value. */
 export const heldInputs = (rule: Rule, given: Readonly<Record<string, number>> = {}): Float64Array =>

@@ -1,13 +1,13 @@
 import { formula, type Rule } from "../../rule/index.js";
 import { outsideRange } from "../refusals.js";
 
-/** Values by name as the formulas of the catalogue read them: constants, and N0 for the first value of N. */
+/** Values by name as the formulas of the catalogue read them: parameters, and N0 for the first value of N. */
 export function namedValues(
   rule: Rule,
-  constants: Float64Array,
+  parameters: Float64Array,
   initial: Float64Array | undefined,
 ): Readonly<Record<string, number>> {
-  const own = rule.constants.map((name, i) => [name, constants[i]!] as const);
+  const own = rule.parameters.map((name, i) => [name, parameters[i]!] as const);
   const first = initial === undefined ? [] : rule.states.map((name, i) => [`${name}0`, initial[i]!] as const);
   return Object.fromEntries([...own, ...first]);
 }

@@ -16,14 +16,14 @@ import { prepared } from "../systems/prepared.js";
 import { sharedUnknowns } from "../unknowns/shared-unknowns.js";
 import { unknownsOf } from "../unknowns/unknowns.js";
 
-/** Groups fitted together: each group's part of the result, and the constants that hold for all. */
+/** Groups fitted together: each group's part of the result, and the parameters that hold for all. */
 export interface JointFit {
   readonly groups: readonly GroupFit[];
   readonly population: readonly Estimate[];
 }
 
 /**
- * Fits the same constants to all groups by least squares, with an initial state for every group and one sigma. In each
+ * Fits the same parameters to all groups by least squares, with an initial state for every group and one sigma. In each
  * group's part the errors are those of the common fit; `sumOfSquares` and `count` are the group's own.
  */
 export function combinedFit(rule: Rule, groups: readonly ObservedGroup[], options: FitOptions): JointFit {
@@ -47,7 +47,7 @@ export function combinedFit(rule: Rule, groups: readonly ObservedGroup[], option
   const left = rows.count - rows.size;
   const estimates = estimatesOf(rule, all, found, level, left);
   return {
-    population: estimates.filter(({ role }) => role === "constant"),
+    population: estimates.filter(({ role }) => role === "parameter"),
     groups: groups.map((group, g) => {
       const measures = {
         criteria: criteria(found.value, rows, options),
@@ -68,9 +68,9 @@ export function combinedFit(rule: Rule, groups: readonly ObservedGroup[], option
   };
 }
 
-/** The constants of one group's start with every group's own initial states. */
+/** The parameters of one group's start with every group's own initial states. */
 function joinedStart(
-  constants: Float64Array,
+  parameters: Float64Array,
   starts: readonly (readonly Float64Array[])[],
   maps: readonly Int32Array[],
   size: number,
@@ -82,7 +82,7 @@ function joinedStart(
     });
   });
   maps[0]!.forEach((place, k) => {
-    if (maps.every((map) => map[k] === place)) whole[place] = constants[k]!;
+    if (maps.every((map) => map[k] === place)) whole[place] = parameters[k]!;
   });
   return whole;
 }

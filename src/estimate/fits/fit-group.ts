@@ -21,7 +21,7 @@ function fitGroup(rule: Rule, group: ObservedGroup, options: FitOptions): GroupF
     : likelihoodFit(rule, group, options);
 }
 
-/** Fits all groups of a record: each on its own, with the same constants, or with constants from a population. */
+/** Fits all groups of a record: each on its own, with the same parameters, or with parameters from a population. */
 export function fitGroups(
   rule: Rule,
   groups: readonly ObservedGroup[],

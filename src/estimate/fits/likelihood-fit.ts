@@ -37,7 +37,7 @@ export function likelihoodFit(rule: Rule, group: ObservedGroup, options: FitOpti
     () => (normal ? normalLikelihoodCut(rows.count, plain.names.length, options) : likelihoodCut(options)),
     options.intervals !== "none",
   );
-  const spread = unknowns.roles.indexOf("spread");
+  const spread = unknowns.roles.indexOf("scale");
   return describeFit(rule, group, options, unknowns, rows, found, {
     criteria: criteriaOf(-0.5 * found.value, rows.count, unknowns.names.length),
     sigma: normal ? Math.sqrt(found.at[spread]!) : undefined,
@@ -45,10 +45,10 @@ export function likelihoodFit(rule: Rule, group: ObservedGroup, options: FitOpti
   });
 }
 
-function likelihoodOf({ spread = "constant" }: FitOptions): ValueLikelihood {
+function likelihoodOf({ distribution: spread = "normal", sd }: FitOptions): ValueLikelihood {
   if (spread === "poisson") return poissonLikelihood;
   if (spread === "negative-binomial") return negativeBinomialLikelihood;
-  return normalLikelihood(spread === "proportional", typeof spread === "object");
+  return normalLikelihood(spread === "lognormal", sd !== undefined);
 }
 
 function minusTwiceLogLikelihood(
@@ -100,10 +100,10 @@ function withSpread(
     excess += (rows.observed[i]! - rows.fitted()) ** 2 - rows.fitted();
     means += rows.fitted() ** 2;
   }
-  const counts = options.spread === "negative-binomial" && !onLogScale(options);
+  const counts = options.distribution === "negative-binomial" && !onLogScale(options);
   const spread = counts ? Math.max(excess / means, 0.01) : squares / rows.count;
   unknowns.roles.forEach((role, i) => {
-    if (role === "spread") whole[i] = spread;
+    if (role === "scale") whole[i] = spread;
   });
   return whole;
 }

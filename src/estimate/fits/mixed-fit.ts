@@ -33,20 +33,20 @@ interface Member {
 }
 
 /**
- * Fits constants that differ from group to group as draws from a normal population: the population's means and standard
- * deviations and sigma by the likelihood in which every group's own constants are integrated out by Laplace's method; its
- * initial states have no population. A group's part gives its own constants, drawn towards the means.
+ * Fits parameters that differ from group to group as draws from a normal population: the population's means and standard
+ * deviations and sigma by the likelihood in which every group's own parameters are integrated out by Laplace's method; its
+ * initial states have no population. A group's part gives its own parameters, drawn towards the means.
  *
  * @see Pinheiro and Bates (2000), Mixed-Effects Models in S and S-PLUS, section 7.2: the Laplace approximation.
  */
 export function mixedFit(rule: Rule, groups: readonly ObservedGroup[], options: FitOptions): JointFit {
   if (groups.length < 3) throw refuseFewGroups(groups.length);
-  const constants = unknownsOf(rule, options).roles.filter((role) => role === "constant").length;
-  const penalty: Penalty = { means: new Float64Array(constants), roots: new Float64Array(constants) };
+  const parameters = unknownsOf(rule, options).roles.filter((role) => role === "parameter").length;
+  const penalty: Penalty = { means: new Float64Array(parameters), roots: new Float64Array(parameters) };
   const members = groups.map((group) => member(rule, group, options, penalty));
-  const population = populationUnknowns(members[0]!.own, constants);
+  const population = populationUnknowns(members[0]!.own, parameters);
   const minusTwice = (at: Float64Array): number => marginal(at, members, penalty);
-  const start = populationStart(members, constants);
+  const start = populationStart(members, parameters);
   const objective = likelihoodObjective(minusTwice, population);
   const found = optimum(
     objective,
@@ -56,7 +56,7 @@ export function mixedFit(rule: Rule, groups: readonly ObservedGroup[], options: 
     options.intervals !== "none",
   );
   minusTwice(found.at);
-  const variance = found.at[2 * constants]!;
+  const variance = found.at[2 * parameters]!;
   const count = members.reduce((sum, each) => sum + each.part.rows.count, 0);
   const measures = {
     criteria: criteriaOf(-0.5 * found.value, count, population.names.length),
@@ -66,8 +66,8 @@ export function mixedFit(rule: Rule, groups: readonly ObservedGroup[], options: 
   const size = population.names.length;
   const weights = penalty.roots.map((root) => root ** 2 / variance);
   const means = Float64Array.from(
-    { length: constants * constants },
-    (_, k) => found.covariance[Math.floor(k / constants) * size + (k % constants)]!,
+    { length: parameters * parameters },
+    (_, k) => found.covariance[Math.floor(k / parameters) * size + (k % parameters)]!,
   );
   return {
     population: estimatesOf(rule, population, found, options.level ?? 0.95, undefined),
@@ -114,44 +114,44 @@ function member(rule: Rule, group: ObservedGroup, options: FitOptions, penalty: 
   return { group, own, part, system: penalisedSystem(part.system, penalty), workspace, at: estimates };
 }
 
-function populationUnknowns(own: Unknowns, constants: number): Unknowns {
-  const names = own.names.slice(0, constants);
-  const spreads = [...names.map((name) => `spread of ${name} among groups`), "sigma"];
+function populationUnknowns(own: Unknowns, parameters: number): Unknowns {
+  const names = own.names.slice(0, parameters);
+  const spreads = [...names.map((name) => `between-group sd of ${name}`), "sigma"];
   const none = new Float64Array(spreads.length);
   return {
     ...own,
     names: [...names, ...spreads],
-    roles: [...own.roles.slice(0, constants), ...spreads.map(() => "spread" as const)],
+    roles: [...own.roles.slice(0, parameters), ...spreads.map(() => "scale" as const)],
     rooted: [...names.map(() => false), ...spreads.map(() => true)],
-    columns: Int32Array.from({ length: constants + spreads.length }, (_, i) => i),
-    lower: Float64Array.from([...own.lower.subarray(0, constants), ...none]),
-    upper: Float64Array.from([...own.upper.subarray(0, constants), ...none.fill(Number.POSITIVE_INFINITY)]),
+    columns: Int32Array.from({ length: parameters + spreads.length }, (_, i) => i),
+    lower: Float64Array.from([...own.lower.subarray(0, parameters), ...none]),
+    upper: Float64Array.from([...own.upper.subarray(0, parameters), ...none.fill(Number.POSITIVE_INFINITY)]),
   };
 }
 
 /** Means and variances of the groups' own estimates, and their common residual variance. */
-function populationStart(members: readonly Member[], constants: number): Float64Array {
-  const start = new Float64Array(2 * constants + 1);
-  for (let k = 0; k < constants; k++) {
+function populationStart(members: readonly Member[], parameters: number): Float64Array {
+  const start = new Float64Array(2 * parameters + 1);
+  for (let k = 0; k < parameters; k++) {
     const values = members.map(({ at }) => at[k]!).sort((a, b) => a - b);
     const middle = values[values.length >> 1]!;
     const spread = values.reduce((sum, value) => sum + (value - middle) ** 2, 0) / values.length;
     start[k] = middle;
-    start[constants + k] = spread || 1e-4 * middle * middle || 1e-4;
+    start[parameters + k] = spread || 1e-4 * middle * middle || 1e-4;
   }
   const sums = members.map(({ part, at }) => part.system.evaluate(at));
   const left = members.reduce((sum, { part }) => sum + part.rows.count - part.rows.size, 0);
-  start[2 * constants] = sums.reduce((sum, each) => sum + each, 0) / Math.max(1, left);
+  start[2 * parameters] = sums.reduce((sum, each) => sum + each, 0) / Math.max(1, left);
   return start;
 }
 
 /** Twice the negative log-likelihood of population means, variances and sigma^2, groups integrated out. */
 function marginal(at: Float64Array, members: readonly Member[], { means, roots }: Penalty): number {
-  const constants = means.length;
-  const variance = at[2 * constants]!;
+  const parameters = means.length;
+  const variance = at[2 * parameters]!;
   let logSpreads = 0;
-  for (let k = 0; k < constants; k++) {
-    const spread = at[constants + k]!;
+  for (let k = 0; k < parameters; k++) {
+    const spread = at[parameters + k]!;
     means[k] = at[k]!;
     roots[k] = Math.sqrt(variance / Math.max(spread, 1e-12 * means[k]! ** 2));
     logSpreads += Math.log((2 * Math.PI * variance) / roots[k]! ** 2);

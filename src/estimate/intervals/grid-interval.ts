@@ -18,7 +18,7 @@ export interface GridIntervalOptions {
   /** Group of the fit; default its first. */
   readonly group?: string;
   /** Simulated records at every value tried; default 399. */
-  readonly draws?: number;
+  readonly resamples?: number;
   /** Default 1. */
   readonly seed?: number;
   /** Default that of the fit. */
@@ -29,18 +29,18 @@ export interface GridIntervalOptions {
 const halvings = 10;
 
 /**
- * Interval of one constant by simulation at every value tried: a value belongs to it when the fit's signed root of the
+ * Interval of one parameter by simulation at every value tried: a value belongs to it when the fit's signed root of the
  * rise of the sum of squares is not out of the ordinary among those of records simulated with that value. It keeps its
  * coverage where the rule's slope is near 1 and the usual intervals of one-step fits do not.
  *
- * @param name - a free constant of the fit.
+ * @param name - a free parameter of the fit.
  * @returns an interval of kind `grid`; a side that no value tried closes is undefined.
  * @throws {ModelError} `unknown-name` | `not-by-least-squares` | `too-few-draws`.
  * @see Hansen, B. E. (1999), The grid bootstrap and the autoregressive model, Review of Economics and Statistics 81:594.
- * @example gridInterval(crowdingFit, "r", { draws: 49 }).kind; // "grid"
+ * @example gridInterval(crowdingFit, "r", { resamples: 49 }).kind; // "grid"
  */
 export function gridInterval(fit: Fit, name: string, options: GridIntervalOptions = {}): Interval {
-  const { draws = 399, seed = 1, level = fit.options.level ?? 0.95 } = options;
+  const { resamples: draws = 399, seed = 1, level = fit.options.level ?? 0.95 } = options;
   if (!(Number.isInteger(draws) && draws >= 20)) throw refuseFewDraws(draws);
   const fitted = fit.groups.find((each) => each.group === (options.group ?? fit.groups[0]!.group))!;
   const i = fitted.estimates.findIndex((each) => each.name === name);
@@ -48,7 +48,7 @@ export function gridInterval(fit: Fit, name: string, options: GridIntervalOption
     throw refuseUnknownName(
       name,
       fitted.estimates.map((each) => each.name),
-      "estimated constant",
+      "estimated parameter",
     );
   const ordinary = ordinaryAt(refitProblem(fit, fitted), fitted, i, draws, seed);
   const tail = (1 - level) / 2;

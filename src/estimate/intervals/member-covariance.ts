@@ -3,8 +3,8 @@
  * where C is the covariance with the means known and B = C W says how far the unknowns follow the means, W being the weights
  * 1/spread^2 of the population.
  *
- * @param own - C, [size, size]; the first `weights.length` unknowns are the constants.
- * @param means - V, [constants, constants]; entries that are not known count as 0.
+ * @param own - C, [size, size]; the first `weights.length` unknowns are the parameters.
+ * @param means - V, [parameters, parameters]; entries that are not known count as 0.
  * @see Kass, R. E. and Steffey, D. (1989), Journal of the American Statistical Association 84:717.
  */
 export function memberCovariance(
@@ -13,15 +13,15 @@ export function memberCovariance(
   means: Float64Array,
 ): Float64Array {
   const size = Math.sqrt(own.length);
-  const constants = weights.length;
+  const parameters = weights.length;
   const follows = (i: number, k: number): number => own[i * size + k]! * weights[k]!;
   return own.map((entry, at) => {
     const i = Math.floor(at / size);
     const j = at % size;
     let added = 0;
-    for (let k = 0; k < constants; k++)
-      for (let l = 0; l < constants; l++)
-        added += follows(i, k) * (means[k * constants + l]! || 0) * follows(j, l);
+    for (let k = 0; k < parameters; k++)
+      for (let l = 0; l < parameters; l++)
+        added += follows(i, k) * (means[k * parameters + l]! || 0) * follows(j, l);
     return entry + added;
   });
 }

@@ -6,7 +6,7 @@ const beyond = 0.01;
 /**
  * Profiles without the limits that a point contradicts: each point met on the way that explains the record within the
  * cut must lie inside every interval, since a profile's interval is the shadow of all such points. A limit beyond which
- * one lies was met by a search that got stuck, as happens where constants run away along a ridge.
+ * one lies was met by a search that got stuck, as happens where parameters run away along a ridge.
  *
  * @param inside - points within the cut, from every profile and search.
  */
@@ -33,7 +33,7 @@ export function withoutFalseLimits(
       ...(lower && { lower: undefined }),
       ...(upper && { upper: undefined }),
       firm: false,
-      note: `no ${side} limit: values beyond explain the record as well where other constants go along`,
+      note: `no ${side} limit: values beyond explain the record as well where other parameters go along`,
     };
   });
 }

@@ -58,7 +58,7 @@ function checkState(group: ObservedGroup, state: string, options: FitOptions): v
   const censoring = group.censoring?.[state];
   if (values.every((value) => value === values[0]) && !censoring?.some((mark) => mark !== 0))
     throw refuseNoChange(group, values[0]!);
-  const counts = options.spread === "poisson" || options.spread === "negative-binomial";
+  const counts = options.distribution === "poisson" || options.distribution === "negative-binomial";
   const wrong = (value: number): boolean =>
     onLogScale(options) ? value <= 0 : counts && !(value >= 0 && Number.isInteger(value));
   const bad = values.findIndex(wrong);

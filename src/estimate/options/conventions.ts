@@ -7,7 +7,7 @@ export function conventionsOf(options: FitOptions, groups: readonly GroupFit[]):
   return [
     errorSentence(options),
     ...(filter ? [filterSentence(filter)] : []),
-    spreadSentence(options),
+    distributionSentence(options),
     intervalSentence(options, groups),
     ...(options.robust === true ? [robustSentence] : []),
     ...groupSentence(options),
@@ -44,13 +44,14 @@ function filterSentence({ method, start, check }: NonNullable<GroupFit["filter"]
   return `${filter}; ${first}.${checked}`;
 }
 
-function spreadSentence({ spread = "constant" }: FitOptions): string {
-  if (typeof spread === "object") return `Normal errors of the known standard deviation ${spread.sd}.`;
-  switch (spread) {
-    case "proportional":
+function distributionSentence({ distribution = "normal", sd }: FitOptions): string {
+  const scale = distribution === "lognormal" ? " on the log scale" : "";
+  if (sd !== undefined) return `Normal errors${scale} of the known standard deviation ${sd}.`;
+  switch (distribution) {
+    case "lognormal":
       return "Spread proportional to the level: normal errors on the log scale.";
-    case "constant":
-      return "Spread constant at every level: normal errors.";
+    case "normal":
+      return "Spread parameter at every level: normal errors.";
     case "poisson":
       return "Counts: variance equal to the mean (Poisson).";
     case "negative-binomial":
@@ -59,10 +60,10 @@ function spreadSentence({ spread = "constant" }: FitOptions): string {
 }
 
 function intervalSentence(options: FitOptions, groups: readonly GroupFit[]): string {
-  const spreads = groups.some((group) => group.estimates.some(({ role }) => role === "spread"));
-  const likelihood = spreads || options.spread === "poisson" || typeof options.spread === "object";
+  const spreads = groups.some((group) => group.estimates.some(({ role }) => role === "scale"));
+  const likelihood = spreads || options.distribution === "poisson" || options.sd !== undefined;
   const normal = groups.some((group) =>
-    group.estimates.some(({ name, role }) => role === "spread" && name === "sigma"),
+    group.estimates.some(({ name, role }) => role === "scale" && name === "sigma"),
   );
   if (normal && options.cut !== "chi-square" && (options.groups ?? "separate") === "separate")
     return "Standard errors by the curvature of the log-likelihood; profile cut n ln(1 + F(1, n - p)/(n - p)), that of least squares; AICc counts every unknown.";
@@ -75,10 +76,10 @@ function intervalSentence(options: FitOptions, groups: readonly GroupFit[]): str
 
 function groupSentence({ groups = "separate" }: FitOptions): string[] {
   if (groups === "combined")
-    return ["The same constants and sigma for all groups, an initial state for each."];
+    return ["The same parameters and sigma for all groups, an initial state for each."];
   if (groups === "mixed")
     return [
-      "Constants differ among groups as draws from a normal population, integrated out by Laplace's method; a group's own are drawn towards its means.",
+      "Parameters differ among groups as draws from a normal population, integrated out by Laplace's method; a group's own are drawn towards its means.",
     ];
   return [];
 }

@@ -1,26 +1,31 @@
 /**
- * Where the scatter of the record is blamed: on the rule's own steps (`process`), on the reading of a value
- * (`observation`), or on both, their shares found from the record.
+ * Where the error lies: in the rule's own steps (`process`), in the observation of a value
+ * (`observation`), or in both, their shares found from the record.
  */
 export type ErrorKind = "process" | "observation" | "both";
 
 /**
- * `constant`: equal scatter at every level; `proportional`: normal errors on the log scale; `poisson` and
- * `negative-binomial`: counts; `{ sd }`: normal errors of a known standard deviation, in the unit of the record.
+ * `normal`: equal scatter at every level; `lognormal`: normal errors on the log scale; `poisson` and
+ * `negative-binomial`: counts.
  */
-export type Spread = "constant" | "proportional" | "poisson" | "negative-binomial" | { readonly sd: number };
+export type ErrorDistribution = "normal" | "lognormal" | "poisson" | "negative-binomial";
 
 /** Options of `fit`. */
 export interface FitOptions {
   /** Has no default: a fit states what it assumes. */
   readonly errors: ErrorKind;
-  /** Default `constant`. */
-  readonly spread?: Spread;
-  /** Constants held at a value. */
+  /** Default `normal`. */
+  readonly distribution?: ErrorDistribution;
+  /**
+   * Standard deviation of the errors where it is known: in the record's unit for `normal`, on the log scale for
+   * `lognormal` (0.1 for a coefficient of variation of 10%); with `errors: "both"`, that of the observation.
+   */
+  readonly sd?: number;
+  /** Parameters held at a value. */
   readonly fixed?: Readonly<Record<string, number>>;
-  /** Lowest and highest admitted value by constant or by initial state ("N[0]"). */
+  /** Lowest and highest admitted value by parameter or by initial state ("N[0]"). */
   readonly bounds?: Readonly<Record<string, readonly [number, number]>>;
-  /** Where the search begins, by constant or initial state; what is not named is found from the record. */
+  /** Where the search begins, by parameter or initial state; what is not named is found from the record. */
   readonly start?: Readonly<Record<string, number>>;
   /**
    * Initial states that are known exactly, by state (oldest first where the rule reads past values); otherwise a
@@ -31,7 +36,7 @@ export interface FitOptions {
   readonly factor?: Readonly<Record<string, string>>;
   /** Lets values far off the rule count for less (Huber's weights), in fits by least squares; default false. */
   readonly robust?: boolean;
-  /** `separate` (default): every group on its own; `combined`: the same constants for all; `mixed`: a spread among them. */
+  /** `separate` (default): every group on its own; `combined`: the same parameters for all; `mixed`: parameters that vary among them. */
   readonly groups?: "separate" | "combined" | "mixed";
   /** Intervals by profile (default), or none, where many fits are made and only estimates are wanted. */
   readonly intervals?: "profile" | "none";
@@ -43,10 +48,10 @@ export interface FitOptions {
 
 /** Whether differences are of logarithms. */
 export function onLogScale(options: FitOptions): boolean {
-  return options.spread === "proportional";
+  return options.distribution === "lognormal";
 }
 
 /** Whether a record without censored values is fitted by least squares. */
-export function bySquares({ errors, spread }: FitOptions): boolean {
+export function bySquares({ errors, distribution: spread }: FitOptions): boolean {
   return errors !== "both" && spread !== "poisson" && spread !== "negative-binomial";
 }

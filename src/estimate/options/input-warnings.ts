@@ -3,12 +3,12 @@ import type { Observations } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
 import type { FitOptions } from "./fit-options.js";
 
-/** Recorded inputs that the rule takes for constants, or does not read at all: the commonest slip with inputs. */
+/** Recorded inputs that the rule takes for parameters, or does not read at all: the commonest slip with inputs. */
 export function inputWarnings(rule: Rule, { inputs }: Observations, { fixed = {} }: FitOptions): Warning[] {
   const unread = inputs.filter((input) => !rule.inputs.includes(input) && !Object.hasOwn(fixed, input));
   return unread.map((input) =>
-    rule.constants.includes(input)
-      ? { code: "input-taken-as-constant", message: takenAsConstant(rule, input) }
+    rule.parameters.includes(input)
+      ? { code: "input-taken-as-parameter", message: takenAsParameter(rule, input) }
       : { code: "input-not-used", message: notUsed(rule, input) },
   );
 }
@@ -17,13 +17,13 @@ export function inputWarnings(rule: Rule, { inputs }: Observations, { fixed = {}
 const readingIt = (rule: Rule, input: string): string =>
   `${rule.named === undefined ? "recurrence(..., " : `rules.${rule.named.name}(`}{ inputs: ["${input}"] })`;
 
-function takenAsConstant(rule: Rule, input: string): string {
-  return `The record holds an input "${input}", but the rule takes ${input} as a constant: write ${readingIt(rule, input)}.`;
+function takenAsParameter(rule: Rule, input: string): string {
+  return `The record holds an input "${input}", but the rule takes ${input} as a parameter: write ${readingIt(rule, input)}.`;
 }
 
 function notUsed(rule: Rule, input: string): string {
   const said = `The record holds an input "${input}", which the rule does not read, so it was not used`;
-  const symbol = rule.named?.mayBeInput?.find((name) => rule.constants.includes(name));
+  const symbol = rule.named?.mayBeInput?.find((name) => rule.parameters.includes(name));
   if (symbol === undefined) return `${said}.`;
-  return `${said}; ${symbol} of the rule was taken as a constant. If ${input} is ${symbol}, give observations(..., { inputs: { ${symbol}: "${input}" } }) and ${readingIt(rule, symbol)}.`;
+  return `${said}; ${symbol} of the rule was taken as a parameter. If ${input} is ${symbol}, give observations(..., { inputs: { ${symbol}: "${input}" } }) and ${readingIt(rule, symbol)}.`;
 }

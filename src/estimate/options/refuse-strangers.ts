@@ -7,14 +7,14 @@ import type { FitOptions } from "./fit-options.js";
 export function refuseStrangers(rule: Rule, options: FitOptions, slots: readonly Slot[]): void {
   const initials = slots.map(({ name }) => name);
   const factors = Object.values(options.factor ?? {});
-  refuseOthers(options.fixed, rule.constants, "constant");
-  refuseOthers(options.start, [...rule.constants, ...initials, ...factors], "constant or initial state");
+  refuseOthers(options.fixed, rule.parameters, "parameter");
+  refuseOthers(options.start, [...rule.parameters, ...initials, ...factors], "parameter or initial state");
   refuseOthers(options.initial, rule.states, "state");
   refuseOthers(options.factor, rule.states, "state");
   refuseOthers(
     options.bounds,
-    [...rule.constants, ...rule.states, ...initials, ...factors],
-    "constant or initial state",
+    [...rule.parameters, ...rule.states, ...initials, ...factors],
+    "parameter or initial state",
   );
   for (const [name, value] of Object.entries(options.start ?? {})) {
     const limit = options.bounds?.[name] ?? rule.bounds[name];

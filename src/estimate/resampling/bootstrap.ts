@@ -12,7 +12,7 @@ export interface BootstrapOptions {
   /** Length of a run; default the cube root of the number of values, rounded up. */
   readonly block?: number;
   /** Refits a group; default 999. */
-  readonly draws?: number;
+  readonly resamples?: number;
   /** Default 1. */
   readonly seed?: number;
   /** Default that of the fit. */
@@ -50,22 +50,22 @@ export interface Bootstrap {
  * @throws {ModelError} `not-by-least-squares` for fits by another likelihood or of groups together; `no-residuals` for
  *   residuals of a state-space fit; `too-few-draws`.
  * @see Davison and Hinkley (1997), Bootstrap Methods and their Application, sections 7.3 and 8.2.
- * @example bootstrap(crowdingFit, { draws: 99 }).rows[0].name; // "r"
+ * @example bootstrap(crowdingFit, { resamples: 99 }).rows[0].name; // "r"
  */
 export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
-  const { errors = "parametric", draws = 999, seed = 1 } = options;
-  if (!(Number.isInteger(draws) && draws >= 20)) throw refuseFewDraws(draws);
+  const { errors = "parametric", resamples = 999, seed = 1 } = options;
+  if (!(Number.isInteger(resamples) && resamples >= 20)) throw refuseFewDraws(resamples);
   let stream = randomStream(seed);
   let used = 0;
   const rows = fit.groups.flatMap((fitted) => {
     const own = stream;
     stream = stream.jump();
     const again = resampler(fit, fitted, errors, options.block);
-    const refits = refitsOf(again, fitted.estimates.length, { ...options, draws }, own);
+    const refits = refitsOf(again, fitted.estimates.length, { ...options, resamples }, own);
     used += refits.length;
     return rowsOf(fitted, refits, options.level ?? fit.options.level ?? 0.95);
   });
-  const failed = fit.groups.length * draws - used;
+  const failed = fit.groups.length * resamples - used;
   return Object.freeze({ kind: "bootstrap", errors, seed, rows: Object.freeze(rows), used, failed });
 }
 
@@ -73,12 +73,12 @@ export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
 function refitsOf(
   { refit, reported }: Resampler,
   size: number,
-  { draws, onProgress }: BootstrapOptions & { draws: number },
+  { resamples, onProgress }: BootstrapOptions & { resamples: number },
   stream: RandomStream,
 ): readonly Float64Array[] {
   const found: Float64Array[] = [];
-  for (let k = 0; k < draws; k++) {
-    if (k % 100 === 0 && onProgress?.(k, draws) === false) break;
+  for (let k = 0; k < resamples; k++) {
+    if (k % 100 === 0 && onProgress?.(k, resamples) === false) break;
     const { estimates, stop } = refit(stream);
     if (stop.kind === "converged")
       found.push(Float64Array.from({ length: size }, (_, i) => reported(i, estimates[i]!)));

@@ -66,7 +66,7 @@ function stepByStep(
     for (let pair = 0; pair < to.length; pair++) {
       for (let s = 0; s < slots.length; s++)
         start[s] = made[sources[pair * slots.length + s]! * states + slotStates[s]!]!;
-      compiled.path(start, unknowns.constants, inputs, group.index[from[pair]!]!, spans[pair]!, path);
+      compiled.path(start, unknowns.parameters, inputs, group.index[from[pair]!]!, spans[pair]!, path);
       for (let s = 0; s < states; s++) {
         const place = to[pair]! * states + s;
         const i = cellOf.get(place);

@@ -23,7 +23,7 @@ export function stateSpaceMaker(
   const { step } = compileRule(rule);
   const { processError, observationError, start } = fitted.filter!;
   const inputs = inputsByPeriod(rule, group);
-  const constants = Float64Array.from(rule.constants, (name) => fitted.constants[name]!);
+  const parameters = Float64Array.from(rule.parameters, (name) => fitted.parameters[name]!);
   const recorded = valueTable(rule, group);
   const states = rule.states.length;
   const first = longestLag(rule);
@@ -34,7 +34,7 @@ export function stateSpaceMaker(
   const log = onLogScale(options);
   const disturbed = (value: number, error: number): number => (log ? value * Math.exp(error) : value + error);
   const move = (state: Float64Array, period: number, stream: RandomStream): void => {
-    step(state, constants, inputs, period, state);
+    step(state, parameters, inputs, period, state);
     for (let s = 0; s < states; s++)
       state[s] = disturbed(state[s]!, processError[rule.states[s]!]! * stream.normal());
   };

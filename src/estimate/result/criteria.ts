@@ -21,9 +21,9 @@ export interface Criteria {
  * @see Hurvich, C. M. and Tsai, C.-L. (1989), Regression and time series model selection in small samples,
  *   Biometrika 76: the correction.
  */
-export function criteria(sumOfSquares: number, rows: FitRows, { spread }: FitOptions): Criteria {
+export function criteria(sumOfSquares: number, rows: FitRows, { sd }: FitOptions): Criteria {
   const { count, size, roots } = rows;
-  const known = typeof spread === "object";
+  const known = sd !== undefined;
   const weights = roots.reduce((sum, root) => sum + Math.log(root), 0);
   const normal = known
     ? -0.5 * (count * Math.log(2 * Math.PI) + sumOfSquares)

@@ -44,7 +44,7 @@ export function describeFit(
       exact ? degreesOfFreedom : undefined,
     ),
     covariance: Array.from(found.covariance),
-    constants: Object.fromEntries(rule.constants.map((name, c) => [name, unknowns.constants[c]!])),
+    parameters: Object.fromEntries(rule.parameters.map((name, c) => [name, unknowns.parameters[c]!])),
     initial: initialOf(rule, group, options, unknowns),
     sumOfSquares,
     count: rows.count,

@@ -7,7 +7,7 @@ import type { UnknownRole, Unknowns } from "../unknowns/unknowns.js";
 
 /** One unknown of a fit. */
 export interface Estimate {
-  /** The constant's name, or "N[0]" for an initial state. */
+  /** The parameter's name, or "N[0]" for an initial state. */
   readonly name: string;
   readonly role: UnknownRole;
   readonly unit: string;

@@ -15,7 +15,7 @@ export interface FitPoint {
   readonly fitted: number;
   /** Observed minus fitted, on the fitting scale. */
   readonly residual: number;
-  /** Share of its own fitted value that this value decides: 0 to 1; NaN where a constant is not determined. */
+  /** Share of its own fitted value that this value decides: 0 to 1; NaN where a parameter is not determined. */
   readonly leverage: number;
 }
 

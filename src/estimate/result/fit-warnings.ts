@@ -8,7 +8,7 @@ import type { Estimate } from "./estimate-of.js";
 import type { GroupFit } from "./group-fit.js";
 import { slopeWarnings } from "./slope-warnings.js";
 
-/** Usable values a constant below which a fit carries a caution: common practice, no source. */
+/** Usable values a parameter below which a fit carries a caution: common practice, no source. */
 const comfortable = 8;
 
 /** What a fit's warnings are drawn from. */
@@ -46,7 +46,7 @@ function stopWarning(fit: Omit<GroupFit, "warnings">): Warning[] {
 }
 
 function undetermined(fit: Omit<GroupFit, "warnings">, { found }: FitContext): Warning[] {
-  const loose = fit.estimates.filter((each) => each.standardError === undefined && each.role !== "spread");
+  const loose = fit.estimates.filter((each) => each.standardError === undefined && each.role !== "scale");
   const together = loose.filter((each) => !found.separable[fit.estimates.indexOf(each)]);
   const combination =
     together.length > 1
@@ -64,7 +64,7 @@ function undetermined(fit: Omit<GroupFit, "warnings">, { found }: FitContext): W
 
 /** The split of process and observation error, or a dispersion, that the record leaves open. */
 function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">): Warning[] {
-  const loose = fit.estimates.filter((each) => each.role === "spread" && each.standardError === undefined);
+  const loose = fit.estimates.filter((each) => each.role === "scale" && each.standardError === undefined);
   if (loose.length === 0) return [];
   const limits = loose.map(
     ({ name, profile }) => `${name} from ${shown(profile.lower, "0")} to ${shown(profile.upper, "no limit")}`,
@@ -74,7 +74,7 @@ function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">): Warning[] {
     {
       code: both ? "errors-not-separated" : "not-determined",
       message: both
-        ? `The record separates the two errors only weakly (${limits.join("; ")}). Give the reading's standard deviation with { spread: { sd } } if replicates tell it.`
+        ? `The record separates the two errors only weakly (${limits.join("; ")}). If replicates tell the standard deviation of a reading, give it as { sd: 0.1 }.`
         : `The record gives no two-sided interval: ${limits.join("; ")}.`,
     },
   ];
@@ -82,7 +82,7 @@ function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">): Warning[] {
 
 const shown = (limit: number | undefined, none: string): string => limit?.toPrecision(3) ?? none;
 
-/** Constants this many times beyond every value of the record, and beyond 1, have run off. */
+/** Parameters this many times beyond every value of the record, and beyond 1, have run off. */
 const runaway = 1e6;
 
 function hasRunOff(fit: Omit<GroupFit, "warnings">, value: number): boolean {
@@ -112,7 +112,7 @@ function rivals(fit: Omit<GroupFit, "warnings">): Warning[] {
   return [
     {
       code: "two-optima",
-      message: `Different constants explain the record almost equally: ${told.join("; ")}. Give { start } or { bounds } if one can be ruled out.`,
+      message: `Different parameters explain the record almost equally: ${told.join("; ")}. Give { start } or { bounds } if one can be ruled out.`,
     },
   ];
 }

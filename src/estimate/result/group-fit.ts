@@ -10,8 +10,8 @@ export interface GroupFit {
   readonly estimates: readonly Estimate[];
   /** [unknowns, unknowns], row-major, by sigma^2 = RSS/(n - p); NaN where not determined. */
   readonly covariance: readonly number[];
-  /** Every constant of the rule at its estimate or its given value. */
-  readonly constants: Readonly<Record<string, number>>;
+  /** Every parameter of the rule at its estimate or its given value. */
+  readonly parameters: Readonly<Record<string, number>>;
   /** Initial states of a trajectory fit (period 0); of a one-step fit the first recorded values. */
   readonly initial: Readonly<Record<string, number>>;
   readonly sumOfSquares: number;

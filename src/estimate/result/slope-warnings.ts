@@ -33,7 +33,7 @@ export function slopeWarnings(fit: Omit<GroupFit, "warnings">, context: FitConte
   return found;
 }
 
-/** Slope of one step at the middle of the record, on the fitting scale, for a rule with one state that has constants. */
+/** Slope of one step at the middle of the record, on the fitting scale, for a rule with one state that has parameters. */
 function slopeAt(
   fit: Omit<GroupFit, "warnings">,
   { rule, options, unknowns, found }: FitContext,
@@ -42,12 +42,12 @@ function slopeAt(
   place(unknowns, found.at);
   const ordered = fit.points.map(({ observed }) => observed).sort((a, b) => a - b);
   const middle = ordered[ordered.length >> 1]!;
-  const width = rule.constants.length + 1;
+  const width = rule.parameters.length + 1;
   const path = new Float64Array(2);
   const sensitivities = new Float64Array(2 * width);
   compileRule(rule).pathWithSensitivities(
     Float64Array.of(middle),
-    unknowns.constants,
+    unknowns.parameters,
     [],
     0,
     1,

@@ -24,7 +24,7 @@ export interface SummaryRow {
   readonly group: string;
   readonly rule: string;
   readonly count: number;
-  readonly unknowns: number;
+  readonly parameters: number;
   readonly sumOfSquares: number;
   readonly sigma: number;
   readonly logLikelihood: number;
@@ -39,7 +39,7 @@ export function summary(fit: Fit): readonly SummaryRow[] {
     group: group.group,
     rule: fit.rule.text,
     count: group.count,
-    unknowns: group.estimates.length,
+    parameters: group.estimates.length,
     sumOfSquares: group.sumOfSquares,
     sigma: group.sigma,
     logLikelihood: group.criteria.logLikelihood,

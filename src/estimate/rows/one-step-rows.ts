@@ -30,7 +30,7 @@ export function oneStepRows(
   const slots = slotsOf(rule);
   const slotStates = Int32Array.from(slots, ({ state }) => rule.states.indexOf(state));
   const states = rule.states.length;
-  const width = rule.constants.length + slots.length;
+  const width = rule.parameters.length + slots.length;
   const longest = spans.reduce((most, span) => Math.max(most, span), 1);
   const path = new Float64Array((longest + 1) * slots.length);
   const sensitivities = new Float64Array((longest + 1) * slots.length * width);
@@ -41,10 +41,10 @@ export function oneStepRows(
   const pairs = Int32Array.from(cells, ({ pair }) => pair);
   const observed = Float64Array.from(cells, ({ pair, state }) => values[to[pair]! * states + state]!);
   const roots = Float64Array.from(cells, ({ pair, state }) =>
-    rootWeight(group, rule.states[state]!, to[pair]!, options.spread),
+    rootWeight(group, rule.states[state]!, to[pair]!, options.sd),
   );
   const start = new Float64Array(slots.length);
-  const { columns, constants } = unknowns;
+  const { columns, parameters } = unknowns;
   const size = columns.length;
   const row = new Float64Array(size);
   const inputs = inputsByPeriod(rule, group);
@@ -70,8 +70,8 @@ export function oneStepRows(
       start[s] = values[sources[pair * start.length + s]! * states + slotStates[s]!]!;
     const period = group.index[from[pair]!]!;
     if (withRows)
-      compiled.pathWithSensitivities(start, constants, inputs, period, spans[pair]!, path, sensitivities);
-    else compiled.path(start, constants, inputs, period, spans[pair]!, path);
+      compiled.pathWithSensitivities(start, parameters, inputs, period, spans[pair]!, path, sensitivities);
+    else compiled.path(start, parameters, inputs, period, spans[pair]!, path);
   };
   const rows: FitRows = {
     size,

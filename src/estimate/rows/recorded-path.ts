@@ -45,7 +45,7 @@ export function recordedPath(rule: Rule, group: ObservedGroup, options: FitOptio
   });
   const observed = new Float64Array(cells.length);
   const roots = Float64Array.from(cells, ({ entry, state }) =>
-    rootWeight(group, rule.states[state]!, entry, options.spread),
+    rootWeight(group, rule.states[state]!, entry, options.sd),
   );
   const table = new Float64Array((periods + 1) * slots.length);
   const weights = new Float64Array(table.length);

@@ -15,10 +15,10 @@ export function trajectoryRows(
 ): FitRows {
   const { first, periods, inputs, places, entries, states, observed, roots, log } = recorded;
   const slots = unknowns.initial.length;
-  const width = rule.constants.length + slots;
+  const width = rule.parameters.length + slots;
   const values = new Float64Array((periods + 1) * slots);
   const sensitivities = new Float64Array((periods + 1) * slots * width);
-  const { columns, constants, initial, factors } = unknowns;
+  const { columns, parameters, initial, factors } = unknowns;
   const size = columns.length;
   const row = new Float64Array(size);
   let withRows = false;
@@ -46,8 +46,8 @@ export function trajectoryRows(
       place(unknowns, at);
       withRows = needRows;
       if (needRows)
-        compiled.pathWithSensitivities(initial, constants, inputs, first, periods, values, sensitivities);
-      else compiled.path(initial, constants, inputs, first, periods, values);
+        compiled.pathWithSensitivities(initial, parameters, inputs, first, periods, values, sensitivities);
+      else compiled.path(initial, parameters, inputs, first, periods, values);
     },
     residualAt(i) {
       fitted = factors[states[i]!]! * values[places[i]!]!;

@@ -1,6 +1,5 @@
 import type { ObservedGroup } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
-import type { Spread } from "../options/fit-options.js";
 
 /** The group's values of the rule's states, [rows, states]; NaN where one is missing. */
 export function valueTable(rule: Rule, group: ObservedGroup): Float64Array {
@@ -21,9 +20,9 @@ export function rootWeight(
   group: ObservedGroup,
   state: string,
   entry: number,
-  spread: Spread | undefined,
+  sd: number | undefined,
 ): number {
-  const known = typeof spread === "object" ? 1 / spread.sd : 1;
+  const known = sd === undefined ? 1 : 1 / sd;
   const weight = group.weights?.[entry] ?? group.replicates?.[state]?.count[entry] ?? 1;
   return known * Math.sqrt(weight);
 }

@@ -5,7 +5,7 @@ import type { FitOptions } from "../options/fit-options.js";
 export interface Cut {
   readonly variance: number;
   readonly cut: number;
-  /** Critical value at the level halfway to certainty: a constant is determined where even that one is passed. */
+  /** Critical value at the level halfway to certainty: a parameter is determined where even that one is passed. */
   readonly firmCut: number;
 }
 
@@ -14,7 +14,7 @@ export interface Cut {
  * likelihood with sigma^2 = RSS/n at every value: n ln(RSS(value)/RSS).
  */
 export function cutOf(sumOfSquares: number, count: number, free: number, options: FitOptions): Cut {
-  if (typeof options.spread === "object") return likelihoodCut(options);
+  if (options.sd !== undefined) return likelihoodCut(options);
   const left = count - free;
   const critical = (level: number): number =>
     options.cut === "chi-square"

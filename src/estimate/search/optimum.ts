@@ -58,7 +58,7 @@ export function optimum(
   };
   if (!withProfiles) return { ...base, profiles: undefined, determined: unscaled.determined };
   const ends = distinct(searches).filter((other) => !alike(other, at));
-  // From where a constant has run off no search comes back: the profile must be tried from before that as well.
+  // From where a parameter has run off no search comes back: the profile must be tried from before that as well.
   const others = hasRunOff(at, starts) ? [...ends, ...starts.slice(0, tries)] : ends;
   const problem = { objective, estimates: at, value: best.value, lower, upper, covariance, others, ...cut };
   const profiles = unknowns.names.map((_, i) => profileOf(problem, i, unscaled.determined[i]!));
@@ -127,7 +127,7 @@ function rivalsOf(best: Lowest, searches: readonly Lowest[], within: number): re
   return found;
 }
 
-/** Ends with the same value are one optimum: the fitted values agree, along an edge at infinity the constants may not. */
+/** Ends with the same value are one optimum: the fitted values agree, along an edge at infinity the parameters may not. */
 function sameEnd(a: Lowest, b: Lowest, within: number): boolean {
   return Math.abs(a.value - b.value) <= 1e-6 * within || alike(a.estimates, b.estimates);
 }

@@ -1,6 +1,6 @@
 import { minimiseSquares } from "../../numeric/index.js";
 import type { ObservedGroup } from "../../record/index.js";
-import { linearInConstants, type Rule } from "../../rule/index.js";
+import { linearInParameters, type Rule } from "../../rule/index.js";
 import { type FitOptions, onLogScale } from "../options/fit-options.js";
 import type { FitRows } from "../rows/fit-rows.js";
 import { type Prepared, prepared } from "../systems/prepared.js";
@@ -72,7 +72,7 @@ function candidates(
   return sorted([...stepped, ...direct]).map((point) => point.at);
 }
 
-/** Whether the one-step fit is solved from anywhere: linear in its constants, without gaps, logarithms or bounds. */
+/** Whether the one-step fit is solved from anywhere: linear in its parameters, without gaps, logarithms or bounds. */
 function hasOneOptimum(
   rule: Rule,
   group: ObservedGroup,
@@ -84,7 +84,11 @@ function hasOneOptimum(
     lower.every((low) => low === Number.NEGATIVE_INFINITY) &&
     upper.every((high) => high === Number.POSITIVE_INFINITY);
   return (
-    options.errors === "process" && !onLogScale(options) && open && unbroken && linearInConstants(rule, names)
+    options.errors === "process" &&
+    !onLogScale(options) &&
+    open &&
+    unbroken &&
+    linearInParameters(rule, names)
   );
 }
 
@@ -108,7 +112,7 @@ function sorted(points: readonly Point[]): Point[] {
   return points.filter((point) => Number.isFinite(point.sum)).sort((a, b) => a.sum - b.sum);
 }
 
-/** The constants of a one-step point, with the first recorded values as initial states. */
+/** The parameters of a one-step point, with the first recorded values as initial states. */
 function withInitial(
   at: Float64Array,
   unknowns: Unknowns,
@@ -143,7 +147,7 @@ function scaleFactors(at: Float64Array, unknowns: Unknowns, rows: FitRows): void
     logs[state] = logs[state]! + Math.log(rows.observed[k]! / rows.fitted());
     counts[state] = counts[state]! + 1;
   }
-  const first = unknowns.constants.length + unknowns.initial.length;
+  const first = unknowns.parameters.length + unknowns.initial.length;
   unknowns.roles.forEach((role, i) => {
     const state = unknowns.columns[i]! - first;
     if (role === "factor") at[i] = Math.exp(logs[state]! / counts[state]!);

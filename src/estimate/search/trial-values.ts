@@ -19,7 +19,7 @@ export function trialPoints(
 ): readonly Float64Array[] {
   const scales = scalesOf(rule, group);
   const choices = unknowns.names.map((name, i) => {
-    const given = options.start?.[name] ?? rule.guesses[name];
+    const given = options.start?.[name] ?? rule.start[name];
     if (given !== undefined) return [given];
     const low = unknowns.lower[i]!;
     const high = unknowns.upper[i]!;
@@ -48,7 +48,7 @@ function everyCombination(choices: readonly (readonly number[])[], total: number
   });
 }
 
-/** Values that constants of plain rules tend to have: pure numbers, levels, changes and inverses of levels. */
+/** Values that parameters of plain rules tend to have: pure numbers, levels, changes and inverses of levels. */
 function scalesOf(rule: Rule, group: ObservedGroup): readonly number[] {
   const pure = [0.02, 0.1, 0.3, 0.6, 0.9, 1.2, 2, 4, -0.1, -0.5, -1];
   const states = rule.states.flatMap((state) => levelScales(group.values[state]!));

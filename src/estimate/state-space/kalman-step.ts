@@ -15,7 +15,7 @@ export interface Dynamics {
   readonly log: boolean;
   /** How many slots are states, not past values. */
   readonly states: number;
-  /** Scratch: [slots], [2 * slots], [2 * slots * (constants + slots)], twice [slots, slots]. */
+  /** Scratch: [slots], [2 * slots], [2 * slots * (parameters + slots)], twice [slots, slots]. */
   readonly value: Float64Array;
   readonly path: Float64Array;
   readonly sensitivities: Float64Array;
@@ -26,12 +26,12 @@ export interface Dynamics {
 /** The scratch arrays of a filter. */
 export function scratch(
   slots: number,
-  constants: number,
+  parameters: number,
 ): Omit<Dynamics, "compiled" | "inputs" | "log" | "states"> {
   return {
     value: new Float64Array(slots),
     path: new Float64Array(2 * slots),
-    sensitivities: new Float64Array(2 * slots * (constants + slots)),
+    sensitivities: new Float64Array(2 * slots * (parameters + slots)),
     slopes: new Float64Array(slots * slots),
     work: new Float64Array(slots * slots),
   };
@@ -44,14 +44,14 @@ export function scratch(
 export function predict(
   belief: Belief,
   dynamics: Dynamics,
-  constants: Float64Array,
+  parameters: Float64Array,
   period: number,
   processVariance: Float64Array,
 ): void {
   const { mean, covariance } = belief;
   const { path, slopes, states, log } = dynamics;
   const slots = mean.length;
-  step(belief, dynamics, constants, period);
+  step(belief, dynamics, parameters, period);
   if (slots === 1) covariance[0] = slopes[0]! * slopes[0]! * covariance[0]! + processVariance[0]!;
   else {
     spreadOut(covariance, slopes, dynamics.work, slots);
@@ -62,15 +62,15 @@ export function predict(
 }
 
 /** Runs the rule one period from the mean, and takes its derivatives by the state vector to the fitting scale. */
-function step({ mean }: Belief, dynamics: Dynamics, constants: Float64Array, period: number): void {
+function step({ mean }: Belief, dynamics: Dynamics, parameters: Float64Array, period: number): void {
   const { compiled, inputs, log, value, path, sensitivities, slopes } = dynamics;
   const slots = mean.length;
-  const width = constants.length + slots;
+  const width = parameters.length + slots;
   for (let i = 0; i < slots; i++) value[i] = log ? Math.exp(mean[i]!) : mean[i]!;
-  compiled.pathWithSensitivities(value, constants, inputs, period, 1, path, sensitivities);
+  compiled.pathWithSensitivities(value, parameters, inputs, period, 1, path, sensitivities);
   for (let i = 0; i < slots; i++) {
     for (let j = 0; j < slots; j++) {
-      const raw = sensitivities[(slots + i) * width + constants.length + j]!;
+      const raw = sensitivities[(slots + i) * width + parameters.length + j]!;
       slopes[i * slots + j] = log ? (raw * value[j]!) / path[slots + i]! : raw;
     }
   }

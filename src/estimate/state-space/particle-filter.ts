@@ -14,7 +14,7 @@ interface Cloud {
 /** What particles need to know of a state-space model at its estimates. */
 export interface ParticleModel {
   readonly dynamics: Dynamics;
-  readonly constants: Float64Array;
+  readonly parameters: Float64Array;
   readonly readings: Readings;
   /** By state, on the fitting scale. */
   readonly processSd: ArrayLike<number>;
@@ -61,11 +61,11 @@ function begin(
 }
 
 function move(model: ParticleModel, { states, slots }: Cloud, period: number, stream: RandomStream): void {
-  const { dynamics, constants, processSd } = model;
+  const { dynamics, parameters, processSd } = model;
   const { value: state, compiled, inputs, log } = dynamics;
   for (let first = 0; first < states.length; first += slots) {
     for (let s = 0; s < slots; s++) state[s] = states[first + s]!;
-    compiled.step(state, constants, inputs, period, state);
+    compiled.step(state, parameters, inputs, period, state);
     for (let s = 0; s < dynamics.states; s++) {
       const error = processSd[s]! * stream.normal();
       state[s] = log ? state[s]! * Math.exp(error) : state[s]! + error;

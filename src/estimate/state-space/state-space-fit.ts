@@ -29,8 +29,8 @@ const farOut = 3;
 
 /** Fits a rule with errors in its steps and in its readings, their shares found from the record. */
 export function stateSpaceFit(rule: Rule, group: ObservedGroup, options: FitOptions): GroupFit {
-  const steps: FitOptions = { ...options, errors: "process" };
-  if (typeof options.spread === "object") Object.assign(steps, { spread: "constant" });
+  const { sd: _, ...others } = options;
+  const steps: FitOptions = { ...others, errors: "process" };
   const plain = unknownsOf(rule, steps);
   const squares = prepared(rule, group, plain, steps);
   const starts = startingPoints(rule, group, steps, plain, squares);
@@ -76,7 +76,7 @@ function withSplits(
     const whole = new Float64Array(unknowns.names.length);
     whole.set(start);
     const first = unknowns.names.length - unknowns.spreads.length;
-    const known = typeof options.spread === "object";
+    const known = options.sd !== undefined;
     for (let k = 0; k < unknowns.spreads.length; k++) {
       const share = known || k < rule.states.length ? process : observation;
       whole[first + k] = share * share * scatter;
@@ -112,7 +112,7 @@ function described(
   space.minusTwice(found.at);
   place(unknowns, found.at);
   const states = rule.states.length;
-  const known = typeof options.spread === "object" ? options.spread.sd : undefined;
+  const known = options.sd;
   const spread = (first: number): Record<string, number> =>
     Object.fromEntries(
       rule.states.map((state, s) => [state, rootOf(unknowns.spreads[first + s]) ?? known ?? Number.NaN]),

@@ -53,9 +53,9 @@ export function stateSpace(
   const slots = slotsOf(rule).length;
   const belief: Belief = { mean: new Float64Array(slots), covariance: new Float64Array(slots * slots) };
   const readings = readingsOf(rule, group, options);
-  const { constants, spreads } = unknowns;
+  const { parameters, spreads } = unknowns;
   const variance = new Float64Array(rule.states.length);
-  const known = typeof options.spread === "object" ? options.spread.sd : undefined;
+  const known = options.sd;
   const readingVariance = (s: number): number =>
     known === undefined ? spreads[rule.states.length + s]! : known * known;
   const from = start === "diffuse" ? readings.skipped : 0;
@@ -65,7 +65,7 @@ export function stateSpace(
     for (let s = 0; s < variance.length; s++) variance[s] = spreads[s]!;
   };
   const exact = (predicted?: Float64Array): number => {
-    const linear = linearAt(dynamics, constants, readings, variance[0]!, readingVariance(0));
+    const linear = linearAt(dynamics, parameters, readings, variance[0]!, readingVariance(0));
     const first =
       start === "stationary"
         ? longRun(linear)
@@ -78,7 +78,7 @@ export function stateSpace(
   };
   const extended = (predicted?: Float64Array): number => {
     beginAsRead(belief, readings, readingVariance, rule.states.length);
-    return extendedFilter(belief, dynamics, constants, readings, from, variance, readingVariance, predicted);
+    return extendedFilter(belief, dynamics, parameters, readings, from, variance, readingVariance, predicted);
   };
   const run = (at: Float64Array, predicted?: Float64Array): number => {
     setDown(at);
@@ -95,7 +95,7 @@ export function stateSpace(
       const sds = rule.states.map((_, s) => Math.sqrt(readingVariance(s)));
       return {
         dynamics,
-        constants,
+        parameters,
         readings,
         processSd: variance.map(Math.sqrt),
         readingSd: sds,
@@ -103,14 +103,14 @@ export function stateSpace(
     },
     longRunSd(at) {
       setDown(at);
-      const linear = linearAt(dynamics, constants, readings, variance[0]!, readingVariance(0));
+      const linear = linearAt(dynamics, parameters, readings, variance[0]!, readingVariance(0));
       return Math.sqrt((longRun(linear)?.variance ?? Number.NaN) + readingVariance(0));
     },
     rows: predictionRows(readings, unknowns.names.length, from, dynamics.log, run),
   };
 }
 
-/** Whether a rule of one state, the same in every period, is linear on the fitting scale at constants set down. */
+/** Whether a rule of one state, the same in every period, is linear on the fitting scale at parameters set down. */
 export function isLinearOnScale(
   rule: Rule,
   group: ObservedGroup,
@@ -128,7 +128,7 @@ export function isLinearOnScale(
     predict(
       { mean: Float64Array.of(mean), covariance: new Float64Array(1) },
       dynamics,
-      unknowns.constants,
+      unknowns.parameters,
       0,
       new Float64Array(1),
     );
@@ -143,20 +143,20 @@ function dynamicsOf(rule: Rule, group: ObservedGroup, options: FitOptions): Dyna
     inputs: inputsByPeriod(rule, group),
     log: onLogScale(options),
     states: rule.states.length,
-    ...scratch(slotsOf(rule).length, rule.constants.length),
+    ...scratch(slotsOf(rule).length, rule.parameters.length),
   };
 }
 
 /** A linear rule read off from one step. */
 function linearAt(
   dynamics: Dynamics,
-  constants: Float64Array,
+  parameters: Float64Array,
   { beginning }: Readings,
   processVariance: number,
   readingVariance: number,
 ): LinearRule {
   const belief = { mean: Float64Array.of(beginning[0]!), covariance: new Float64Array(1) };
-  predict(belief, dynamics, constants, 0, new Float64Array(1));
+  predict(belief, dynamics, parameters, 0, new Float64Array(1));
   const slope = dynamics.slopes[0]!;
   return { slope, intercept: belief.mean[0]! - slope * beginning[0]!, processVariance, readingVariance };
 }
@@ -176,7 +176,7 @@ function beginAsRead(
 function extendedFilter(
   belief: Belief,
   dynamics: Dynamics,
-  constants: Float64Array,
+  parameters: Float64Array,
   readings: Readings,
   from: number,
   variance: Float64Array,
@@ -186,7 +186,7 @@ function extendedFilter(
   let period = readings.first;
   let sum = 0;
   for (let i = from; i < readings.count; i++) {
-    for (; period < readings.periods[i]!; period++) predict(belief, dynamics, constants, period, variance);
+    for (; period < readings.periods[i]!; period++) predict(belief, dynamics, parameters, period, variance);
     const s = readings.states[i]!;
     if (predicted) predicted[i] = belief.mean[s]!;
     sum += takeIn(belief, dynamics, s, readings.values[i]!, readingVariance(s) / readings.roots[i]! ** 2);

@@ -20,15 +20,15 @@ export function oneStepSystem(
   unknowns: Unknowns,
   { inputs, periods, from, observed, weights }: RecordedSteps,
 ): LinearisedSystem {
-  const { columns, constants } = unknowns;
-  const { sums, triangle, projected, factor } = packedSums(columns, constants.length);
+  const { columns, parameters } = unknowns;
+  const { sums, triangle, projected, factor } = packedSums(columns, parameters.length);
   return {
     size: columns.length,
     triangle,
     projected,
     evaluate(at) {
       place(unknowns, at);
-      return stepSums(constants, inputs, periods, from, observed, weights, sums);
+      return stepSums(parameters, inputs, periods, from, observed, weights, sums);
     },
     linearise: factor,
   };

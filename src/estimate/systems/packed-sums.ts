@@ -12,7 +12,7 @@ export interface PackedSums {
 /**
  * Picks the unknowns of a fit out of sums over all that a rule has.
  *
- * @param columns - [unknowns]: which of the `width` constants and initial states each is.
+ * @param columns - [unknowns]: which of the `width` parameters and initial states each is.
  */
 export function packedSums(columns: Int32Array, width: number): PackedSums {
   const size = columns.length;

@@ -1,13 +1,13 @@
 import { type LinearisedSystem, rotateRowIn } from "../../numeric/index.js";
 
-/** Pull of a population on the constants of a group. */
+/** Pull of a population on the parameters of a group. */
 export interface Penalty {
-  /** [constants]: mean of the population, and root of the weight of (constant - mean)^2; changed in place. */
+  /** [parameters]: mean of the population, and root of the weight of (parameter - mean)^2; changed in place. */
   readonly means: Float64Array;
   readonly roots: Float64Array;
 }
 
-/** A group's least-squares system with its first unknowns, the constants, drawn towards the means of a population. */
+/** A group's least-squares system with its first unknowns, the parameters, drawn towards the means of a population. */
 export function penalisedSystem(system: LinearisedSystem, { means, roots }: Penalty): LinearisedSystem {
   const { size } = system;
   const triangle = new Float64Array(size * size);
@@ -18,14 +18,14 @@ export function penalisedSystem(system: LinearisedSystem, { means, roots }: Pena
     size,
     triangle,
     projected,
-    evaluate(constants) {
-      at.set(constants);
-      let sum = system.evaluate(constants);
-      for (let k = 0; k < means.length; k++) sum += (roots[k]! * (constants[k]! - means[k]!)) ** 2;
+    evaluate(parameters) {
+      at.set(parameters);
+      let sum = system.evaluate(parameters);
+      for (let k = 0; k < means.length; k++) sum += (roots[k]! * (parameters[k]! - means[k]!)) ** 2;
       return sum;
     },
-    linearise(constants) {
-      if (!system.linearise(constants)) return false;
+    linearise(parameters) {
+      if (!system.linearise(parameters)) return false;
       triangle.set(system.triangle);
       projected.set(system.projected);
       for (let k = 0; k < means.length; k++) {

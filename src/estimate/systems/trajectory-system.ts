@@ -18,15 +18,15 @@ export function trajectorySystem(
     weights,
   }: Pick<RecordedPath, "inputs" | "first" | "periods" | "table" | "weights">,
 ): LinearisedSystem {
-  const { columns, constants, initial } = unknowns;
-  const { sums, triangle, projected, factor } = packedSums(columns, constants.length + initial.length);
+  const { columns, parameters, initial } = unknowns;
+  const { sums, triangle, projected, factor } = packedSums(columns, parameters.length + initial.length);
   return {
     size: columns.length,
     triangle,
     projected,
     evaluate(at) {
       place(unknowns, at);
-      return pathSums(initial, constants, inputs, first, periods, table, weights, sums);
+      return pathSums(initial, parameters, inputs, first, periods, table, weights, sums);
     },
     linearise: factor,
   };

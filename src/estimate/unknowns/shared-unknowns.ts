@@ -1,7 +1,7 @@
 import type { ObservedGroup } from "../../record/index.js";
 import type { Unknowns } from "./unknowns.js";
 
-/** The unknowns of several groups fitted together: constants once, all else a group. */
+/** The unknowns of several groups fitted together: parameters once, all else a group. */
 export interface SharedUnknowns {
   readonly all: Unknowns;
   /** By group: for each of its own unknowns its number among all. */
@@ -11,16 +11,16 @@ export interface SharedUnknowns {
 /** Lays the unknowns of groups together; an initial state is named after its group: "N[0] of flask A". */
 export function sharedUnknowns(groups: readonly ObservedGroup[], own: readonly Unknowns[]): SharedUnknowns {
   const first = own[0]!;
-  const constants = first.roles.filter((role) => role === "constant").length;
-  const others = first.names.length - constants;
+  const parameters = first.roles.filter((role) => role === "parameter").length;
+  const others = first.names.length - parameters;
   const picks = [
-    ...Array.from({ length: constants }, (_, k) => ({ g: 0, k })),
-    ...groups.flatMap((_, g) => Array.from({ length: others }, (_, k) => ({ g, k: constants + k }))),
+    ...Array.from({ length: parameters }, (_, k) => ({ g: 0, k })),
+    ...groups.flatMap((_, g) => Array.from({ length: others }, (_, k) => ({ g, k: parameters + k }))),
   ];
   const all: Unknowns = {
     ...first,
     names: picks.map(({ g, k }) =>
-      k < constants ? first.names[k]! : `${first.names[k]} of ${groups[g]!.name}`,
+      k < parameters ? first.names[k]! : `${first.names[k]} of ${groups[g]!.name}`,
     ),
     roles: picks.map(({ k }) => first.roles[k]!),
     columns: Int32Array.from(picks, ({ k }) => first.columns[k]!),
@@ -29,7 +29,7 @@ export function sharedUnknowns(groups: readonly ObservedGroup[], own: readonly U
     upper: Float64Array.from(picks, ({ g, k }) => own[g]!.upper[k]!),
   };
   const maps = groups.map((_, g) =>
-    Int32Array.from(first.names, (_, k) => (k < constants ? k : constants + g * others + (k - constants))),
+    Int32Array.from(first.names, (_, k) => (k < parameters ? k : parameters + g * others + (k - parameters))),
   );
   return { all, maps };
 }

@@ -6,6 +6,6 @@ export function spreadNames(rule: Rule, options: FitOptions): readonly string[] 
   const named = (what: string, state: string): string =>
     rule.states.length === 1 ? what : `${what} of ${state}`;
   const process = rule.states.map((state) => named("process error", state));
-  const known = typeof options.spread === "object";
+  const known = options.sd !== undefined;
   return [...process, ...(known ? [] : rule.states.map((state) => named("observation error", state)))];
 }

@@ -4,16 +4,16 @@ import { refuseStrangers } from "../options/refuse-strangers.js";
 import { type Slot, slotsOf } from "./slots.js";
 
 /** What an unknown stands for. */
-export type UnknownRole = "constant" | "initial" | "factor" | "spread";
+export type UnknownRole = "parameter" | "initial" | "factor" | "scale";
 
-/** What a fit is to find: free constants, initial states that are not known, factors of the record, spreads. */
+/** What a fit is to find: free parameters, initial states that are not known, factors of the record, spreads. */
 export interface Unknowns {
   readonly names: readonly string[];
   readonly roles: readonly UnknownRole[];
-  /** [unknowns]: constant number, then constants + slot of the state vector, then further + state of a factor, then spreads. */
+  /** [unknowns]: constant number, then parameters + slot of the state vector, then further + state of a factor, then spreads. */
   readonly columns: Int32Array;
-  /** [constants of the rule], fixed values in place. */
-  readonly constants: Float64Array;
+  /** [parameters of the rule], fixed values in place. */
+  readonly parameters: Float64Array;
   /** [slots of the rule's state vector], known values in place. */
   readonly initial: Float64Array;
   /** [states]: recorded = factor * state; 1 where there is none. */
@@ -31,22 +31,22 @@ interface Unknown {
   readonly column: number;
 }
 
-/** Sorts constants and initial states into those to be found and those given. */
+/** Sorts parameters and initial states into those to be found and those given. */
 export function unknownsOf(rule: Rule, options: FitOptions, spreads: readonly string[] = []): Unknowns {
   const fixed = { ...rule.fixed, ...options.fixed };
   const bounds = { ...rule.bounds, ...options.bounds };
   const slots = slotsOf(rule);
   refuseStrangers(rule, options, slots);
   const known = slots.map((slot) => knownInitial(rule, options, slot));
-  const afterConstants = rule.constants.length;
-  const afterSlots = afterConstants + slots.length;
+  const afterParameters = rule.parameters.length;
+  const afterSlots = afterParameters + slots.length;
   const afterFactors = afterSlots + rule.states.length;
   const all: Unknown[] = [
-    ...rule.constants
-      .map((name, column): Unknown => ({ name, role: "constant", column }))
+    ...rule.parameters
+      .map((name, column): Unknown => ({ name, role: "parameter", column }))
       .filter(({ name }) => fixed[name] === undefined),
     ...(options.errors === "observation" ? slots : [])
-      .map(({ name }, s): Unknown => ({ name, role: "initial", column: afterConstants + s }))
+      .map(({ name }, s): Unknown => ({ name, role: "initial", column: afterParameters + s }))
       .filter((_, s) => known[s] === undefined),
     ...Object.entries(options.factor ?? {}).map(
       ([state, name]): Unknown => ({
@@ -55,21 +55,21 @@ export function unknownsOf(rule: Rule, options: FitOptions, spreads: readonly st
         column: afterSlots + rule.states.indexOf(state),
       }),
     ),
-    ...spreads.map((name, k): Unknown => ({ name, role: "spread", column: afterFactors + k })),
+    ...spreads.map((name, k): Unknown => ({ name, role: "scale", column: afterFactors + k })),
   ];
   const limits = all.map(
-    ({ name, role }) => bounds[name] ?? (role === "factor" || role === "spread" ? positive : open),
+    ({ name, role }) => bounds[name] ?? (role === "factor" || role === "scale" ? positive : open),
   );
   return {
     names: all.map(({ name }) => name),
     roles: all.map(({ role }) => role),
     columns: Int32Array.from(all, ({ column }) => column),
-    constants: Float64Array.from(rule.constants, (name) => fixed[name] ?? Number.NaN),
+    parameters: Float64Array.from(rule.parameters, (name) => fixed[name] ?? Number.NaN),
     initial: Float64Array.from(known, (value) => value ?? Number.NaN),
     factors: new Float64Array(rule.states.length).fill(1),
     spreads: new Float64Array(spreads.length),
     // A dispersion is a ratio of its own; the others are variances, which reach 0 with a slope where roots do not.
-    rooted: all.map(({ name, role }) => role === "spread" && name !== "dispersion"),
+    rooted: all.map(({ name, role }) => role === "scale" && name !== "dispersion"),
     lower: Float64Array.from(limits, ([low]) => low),
     upper: Float64Array.from(limits, ([, high]) => high),
   };
@@ -85,15 +85,15 @@ function knownInitial(rule: Rule, options: FitOptions, slot: Slot): number | und
   return typeof stated === "number" ? (slot.lag === 0 ? stated : undefined) : stated.at(-1 - slot.lag);
 }
 
-/** Writes values of the unknowns into the rule's constants, initial states, factors and spreads. */
+/** Writes values of the unknowns into the rule's parameters, initial states, factors and spreads. */
 export function place(unknowns: Unknowns, values: Float64Array): void {
-  const { columns, constants, initial, factors, spreads } = unknowns;
-  const afterSlots = constants.length + initial.length;
+  const { columns, parameters, initial, factors, spreads } = unknowns;
+  const afterSlots = parameters.length + initial.length;
   const afterFactors = afterSlots + factors.length;
   for (let i = 0; i < columns.length; i++) {
     const column = columns[i]!;
-    if (column < constants.length) constants[column] = values[i]!;
-    else if (column < afterSlots) initial[column - constants.length] = values[i]!;
+    if (column < parameters.length) parameters[column] = values[i]!;
+    else if (column < afterSlots) initial[column - parameters.length] = values[i]!;
     else if (column < afterFactors) factors[column - afterSlots] = values[i]!;
     else spreads[column - afterFactors] = values[i]!;
   }

@@ -1,6 +1,6 @@
 import type { Refitter } from "../refit/refitter.js";
 
-/** One date at which the constants may change: what two fits, before and after it, leave unexplained. */
+/** One date at which the parameters may change: what two fits, before and after it, leave unexplained. */
 export interface BreakDate {
   /** First compared value of the part after. */
   readonly first: number;

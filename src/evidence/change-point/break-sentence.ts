@@ -13,16 +13,16 @@ export function breakSentence(found: Omit<GroupChangePoint, "sentence">, fit: Fi
       `${chance} of records without one.`
     );
   const shown = (value: number): string => Number(value.toPrecision(3)).toString();
-  const moved = Object.keys(found.before.constants)
-    .filter((name) => found.before.constants[name] !== found.after.constants[name])
+  const moved = Object.keys(found.before.parameters)
+    .filter((name) => found.before.parameters[name] !== found.after.parameters[name])
     .map(
       (name) =>
-        `${name} from ${shown(found.before.constants[name]!)} to ${shown(found.after.constants[name]!)}`,
+        `${name} from ${shown(found.before.parameters[name]!)} to ${shown(found.after.parameters[name]!)}`,
     );
   const less = found.probability < 0.01 ? "less than 1%" : chance;
   return (
     `${who}The rule changed from ${column} ${named(found.date)} on (${Math.round(100 * level)}% interval ` +
     `${named(found.earliest)} to ${named(found.latest)}): ${moved.join(", ")}. By chance a difference as large comes up ` +
-    `in ${less} of records without a break. Project with the constants after it only.`
+    `in ${less} of records without a break. Project with the parameters after it only.`
   );
 }

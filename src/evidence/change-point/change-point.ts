@@ -10,44 +10,44 @@ export interface ChangePointOptions extends Omit<FitOptions, "errors" | "interva
   /** Least share of the record on either side of a break; default 0.15. */
   readonly leastShare?: number;
   /** Records without a break that the largest F is held against; default 399, with which 5% is met exactly. */
-  readonly draws?: number;
+  readonly resamples?: number;
   /** Default 1. */
   readonly seed?: number;
 }
 
-/** A search for a break in the constants of a rule. */
+/** A search for a break in the parameters of a rule. */
 export interface ChangePoint {
   readonly kind: "change-point";
   /** The fit without a break. */
   readonly fit: Fit;
   readonly level: number;
-  readonly draws: number;
+  readonly resamples: number;
   readonly groups: readonly GroupChangePoint[];
   readonly sentence: string;
 }
 
 /**
- * Looks for one date from which all constants of a rule take other values.
+ * Looks for one date from which all parameters of a rule take other values.
  *
  * The rule is fitted step by step before and after every date that leaves enough pairs on either side; the largest F is
  * held against its own distribution in records without a break (not against the F table, which would call a break in
  * far too many), and the interval holds the dates whose likelihood lies within its cut of the best one.
  *
- * @returns per group the date, its interval and both sets of constants, whether or not a break is found.
+ * @returns per group the date, its interval and both sets of parameters, whether or not a break is found.
  * @throws {ModelError} `too-short-for-a-break` | `exact-fit` and those of `fit`.
  * @see Andrews, D. W. K. (1993), Tests for parameter instability and structural change with unknown change point,
  *   Econometrica 61; Diebold, F. X. and Chen, C. (1996), Testing structural stability with endogenous breakpoint, Journal
  *   of Econometrics 70: its distribution in short dynamic records, by drawing them; Eo, Y. and
  *   Morley, J. (2015), Likelihood-ratio-based confidence sets for the timing of structural breaks, Quantitative Economics
  *   6: the interval.
- * @example changePoint(crowding, counts, { spread: "proportional" }).groups[0].found; // false
+ * @example changePoint(crowding, counts, { distribution: "lognormal" }).groups[0].found; // false
  */
 export function changePoint(
   rule: Rule,
   observations: Observations,
   options: ChangePointOptions = {},
 ): ChangePoint {
-  const { leastShare = 0.15, draws = 399, seed = 1, ...others } = options;
+  const { leastShare = 0.15, resamples = 399, seed = 1, ...others } = options;
   const level = options.level ?? 0.95;
   const fit = fitRule(rule, observations, { ...others, errors: "process", intervals: "none" });
   refuseExact(fit);
@@ -55,8 +55,15 @@ export function changePoint(
   const groups = fit.groups.map((group) => {
     const own = stream;
     stream = stream.jump();
-    return groupChangePoint(fit, group, { leastShare, draws, level }, own);
+    return groupChangePoint(fit, group, { leastShare, draws: resamples, level }, own);
   });
   const sentence = groups.map((group) => group.sentence).join(" ");
-  return Object.freeze({ kind: "change-point", fit, level, draws, groups: Object.freeze(groups), sentence });
+  return Object.freeze({
+    kind: "change-point",
+    fit,
+    level,
+    resamples,
+    groups: Object.freeze(groups),
+    sentence,
+  });
 }

@@ -6,15 +6,15 @@ import { type BreakDate, breakScan } from "./break-scan.js";
 import { breakSentence } from "./break-sentence.js";
 import { fRatio, type SupremumDraw, supremumDraw } from "./supremum-draw.js";
 
-/** The constants of one part of a record. */
+/** The parameters of one part of a record. */
 export interface Regime {
   /** First and last time of the part, in the period column's unit. */
   readonly from: number;
   readonly to: number;
-  readonly constants: Readonly<Record<string, number>>;
+  readonly parameters: Readonly<Record<string, number>>;
 }
 
-/** Whether, and when, the constants of one group changed. */
+/** Whether, and when, the parameters of one group changed. */
 export interface GroupChangePoint {
   readonly group: string;
   /** Largest F over the dates. */
@@ -67,7 +67,7 @@ export function groupChangePoint(
   return Object.freeze({ ...found, sentence: breakSentence(found, fit, search.level) });
 }
 
-/** The likeliest date with those not told from it, the constants on either side, and F at every date. */
+/** The likeliest date with those not told from it, the parameters on either side, and F at every date. */
 function datedBy(
   fit: Fit,
   group: GroupFit,
@@ -82,16 +82,16 @@ function datedBy(
   const close = scan.filter(
     (date) => count * Math.log(date.sumOfSquares / best.sumOfSquares) <= cutOf(level),
   );
-  const constants = (values: Float64Array): Regime["constants"] => ({
-    ...group.constants,
+  const parameters = (values: Float64Array): Regime["parameters"] => ({
+    ...group.parameters,
     ...Object.fromEntries(again.unknowns.names.map((name, i) => [name, values[i]!])),
   });
   return {
     date: at(best),
     earliest: at(close[0]!),
     latest: at(close[close.length - 1]!),
-    before: { from: time[0]!, to: time[entries[best.first]! - 1]!, constants: constants(best.before) },
-    after: { from: at(best), to: time[time.length - 1]!, constants: constants(best.after) },
+    before: { from: time[0]!, to: time[entries[best.first]! - 1]!, parameters: parameters(best.before) },
+    after: { from: at(best), to: time[time.length - 1]!, parameters: parameters(best.after) },
     trace: scan.map((date) => ({
       date: at(date),
       statistic: fRatio(group.sumOfSquares, date.sumOfSquares, count, size),

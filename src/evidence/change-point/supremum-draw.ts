@@ -8,7 +8,7 @@ export type SupremumDraw = (stream: RandomStream) => number | undefined;
 
 /**
  * Makes draws of the largest F over the dates under "no break": a record is drawn from the fit without one, fitted, and
- * at each date both parts take one Gauss-Newton step from that fit, which in a rule linear in its constants is the whole
+ * at each date both parts take one Gauss-Newton step from that fit, which in a rule linear in its parameters is the whole
  * way.
  */
 export function supremumDraw(

@@ -12,7 +12,7 @@ import { type Window, windows } from "./windows.js";
 /** Options of `check`. */
 export interface CheckOptions {
   /** Records drawn from the fit and refitted; default 200, the least before an interval is quoted. */
-  readonly refits?: number;
+  readonly resamples?: number;
   /** Default 1. */
   readonly seed?: number;
 }
@@ -48,7 +48,7 @@ const adviceDraws = 60;
 
 /**
  * Looks for what speaks against a fit: tests of its residuals, how much its ends and its window decide, its misfit
- * against replicates, whether refits of records drawn from it find its constants again (bias, and the share of
+ * against replicates, whether refits of records drawn from it find its parameters again (bias, and the share of
  * intervals that hold the truth), and whether the scatter lies in the reading or in the change.
  *
  * @returns per group the single checks, and what they come to in words.
@@ -56,9 +56,9 @@ const adviceDraws = 60;
  * @example check(fit(crowding, counts, { errors: "observation" })).sentence;
  */
 export function check(fit: Fit, options: CheckOptions = {}): Check {
-  const settings = { refits: options.refits ?? 200, seed: options.seed ?? 1 };
-  if (!Number.isInteger(settings.refits) || settings.refits < leastRefits)
-    throw refuseFewRefits(settings.refits, leastRefits);
+  const settings = { resamples: options.resamples ?? 200, seed: options.seed ?? 1 };
+  if (!Number.isInteger(settings.resamples) || settings.resamples < leastRefits)
+    throw refuseFewRefits(settings.resamples, leastRefits);
   refuseExact(fit);
   let stream = randomStream(settings.seed);
   const groups = fit.groups.map((group) => {
@@ -80,7 +80,7 @@ export function check(fit: Fit, options: CheckOptions = {}): Check {
 function groupCheck(
   fit: Fit,
   group: GroupFit,
-  { refits }: Required<CheckOptions>,
+  { resamples: refits }: Required<CheckOptions>,
   stream: RandomStream,
 ): GroupCheck {
   const found = {

@@ -23,7 +23,7 @@ export interface LackOfFit {
 export function lackOfFit(fit: Fit, group: GroupFit): readonly LackOfFit[] {
   const recorded = fit.observations.groups.find((each) => each.name === group.group)!;
   if (fit.options.errors === "process" || recorded.replicates === undefined) return [];
-  const log = fit.options.spread === "proportional";
+  const log = fit.options.distribution === "lognormal";
   return fit.rule.states.flatMap((state) => {
     const spread = recorded.replicates?.[state];
     const points = group.points.filter((point) => point.state === state);

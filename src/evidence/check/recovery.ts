@@ -21,11 +21,11 @@ export interface RecoveredUnknown {
 /** What refits of drawn records tell about a fit's intervals. */
 export interface Recovery {
   /** Records that could be drawn and refitted. */
-  readonly refits: number;
+  readonly resamples: number;
   /** Draws or refits that came to nothing. */
   readonly failed: number;
   readonly level: number;
-  readonly unknowns: readonly RecoveredUnknown[];
+  readonly parameters: readonly RecoveredUnknown[];
 }
 
 /** One record drawn and fitted: its estimates, and whether each one's interval holds the truth. */
@@ -67,7 +67,7 @@ export function recovery(
       held,
     );
   });
-  return { refits: found.length, failed, level: fit.options.level ?? 0.95, unknowns };
+  return { resamples: found.length, failed, level: fit.options.level ?? 0.95, parameters: unknowns };
 }
 
 type Attempt = (stream: RandomStream) => Refit | undefined;

@@ -54,12 +54,12 @@ function residualConcerns({ tests }: Found): string[] {
   const spread = tests.find((test) => test.name === "Spread on level" && test.sign === "clear");
   if (spread)
     found.push(
-      `The scatter changes with the level (p ${probabilityText(spread.probability!)}): try the other { spread }.`,
+      `The scatter changes with the level (p ${probabilityText(spread.probability!)}): try { distribution: "lognormal" } or "normal".`,
     );
   return found;
 }
 
-/** An initial state leans on the first row by its nature, so only constants are held against the ends. */
+/** An initial state leans on the first row by its nature, so only parameters are held against the ends. */
 function endConcerns(group: GroupFit, windows: readonly Window[]): string[] {
   return windows
     .filter((window) => window.name.endsWith(" row"))
@@ -67,7 +67,7 @@ function endConcerns(group: GroupFit, windows: readonly Window[]): string[] {
       window.estimates
         .filter(
           (estimate, i) =>
-            group.estimates[i]!.role === "constant" && Math.abs(estimate.shift ?? 0) > decisive,
+            group.estimates[i]!.role === "parameter" && Math.abs(estimate.shift ?? 0) > decisive,
         )
         .map(
           (estimate) =>
@@ -79,26 +79,27 @@ function endConcerns(group: GroupFit, windows: readonly Window[]): string[] {
 function heldText(recovery: Found["recovery"]): string {
   if (recovery === undefined)
     return "its intervals were not tried on drawn records, which counts, censored values and groups fitted together do not allow";
-  if (recovery.refits === 0) return "no record could be drawn from it";
+  if (recovery.resamples === 0) return "no record could be drawn from it";
   const level = Math.round(100 * recovery.level);
-  const fewest = Math.min(...recovery.unknowns.map((unknown) => unknown.coverage));
-  return `in ${recovery.refits} records drawn from it, the ${level}% intervals held the true values in ${percent(fewest)} or more`;
+  const fewest = Math.min(...recovery.parameters.map((unknown) => unknown.coverage));
+  return `in ${recovery.resamples} records drawn from it, the ${level}% intervals held the true values in ${percent(fewest)} or more`;
 }
 
 function recoveryConcerns({ recovery }: Found): string[] {
   const found: string[] = [];
   if (recovery === undefined) return found;
-  if (recovery.failed > 0.05 * (recovery.refits + recovery.failed))
+  if (recovery.failed > 0.05 * (recovery.resamples + recovery.failed))
     found.push(
-      `${recovery.failed} of ${recovery.refits + recovery.failed} drawn records could not be refitted.`,
+      `${recovery.failed} of ${recovery.resamples + recovery.failed} drawn records could not be refitted.`,
     );
-  for (const unknown of recovery.unknowns) {
+  for (const unknown of recovery.parameters) {
     if (isBiased(unknown))
       found.push(
         `Refits of drawn records put ${unknown.name} too ${unknown.medianBias > 0 ? "high" : "low"}, by ${(Math.abs(unknown.medianBias) / unknown.deviation).toFixed(1)} of their standard deviation.`,
       );
     // Three Monte-Carlo errors below the level.
-    const floor = recovery.level - 3 * Math.sqrt((recovery.level * (1 - recovery.level)) / recovery.refits);
+    const floor =
+      recovery.level - 3 * Math.sqrt((recovery.level * (1 - recovery.level)) / recovery.resamples);
     if (unknown.coverage < floor)
       found.push(
         `The interval of ${unknown.name} held its true value in only ${percent(unknown.coverage)} of drawn records: it is too narrow.`,

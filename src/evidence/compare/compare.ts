@@ -11,7 +11,7 @@ export interface CompareOptions {
   /** Rows from which each rival is fitted afresh and carried forward; default a third of the record, 12 at most. */
   readonly origins?: number;
   /** Periods forecast from each; default a tenth of the record. */
-  readonly horizon?: number;
+  readonly periods?: number;
   /** Level of the forecasts' intervals; default 0.8. */
   readonly level?: number;
   /** What the client would be told by a fit; where rivals are not told apart, what each says is set side by side. */
@@ -44,7 +44,7 @@ export interface Comparison {
  * other, and forecasts from earlier parts of the record against naive ones. Says which is supported, that they cannot be
  * told apart (AICc within 2), or that none is adequate.
  *
- * With groups the AICc of the groups are added, each group having its own constants and sigma. Where the spreads
+ * With groups the AICc of the groups are added, each group having its own parameters and sigma. Where the spreads
  * differ, fits on the log scale are brought to the record's own scale by the Jacobian, -sum ln(y). With `decide`, what
  * every rule that stands leads to is told, and none is called best.
  *
@@ -58,7 +58,7 @@ export function compare(fits: readonly Fit[], options: CompareOptions = {}): Com
   if (!first || fits.length < 2) throw refuseOneFit(fits.length);
   for (const other of fits.slice(1)) refuseUnlike(first, other);
   for (const fit of fits) refuseExact(fit);
-  const scalesDiffer = new Set(fits.map((fit) => fit.options.spread ?? "constant")).size > 1;
+  const scalesDiffer = new Set(fits.map((fit) => fit.options.distribution ?? "normal")).size > 1;
   const rows = comparisonRows(fits, scalesDiffer);
   const rolled = rollingOrigin(fits, planOf(first, options));
   const { verdict, standing, sentence } = comparisonVerdict(fits, rows, rolled);
@@ -77,7 +77,7 @@ export function compare(fits: readonly Fit[], options: CompareOptions = {}): Com
 
 function planOf(
   fit: Fit,
-  { origins, horizon, level = 0.8 }: CompareOptions,
+  { origins, periods: horizon, level = 0.8 }: CompareOptions,
 ): Parameters<typeof rollingOrigin>[1] {
   const rows = Math.min(...fit.observations.groups.map((group) => group.index.length));
   const count = origins ?? Math.min(12, Math.round(rows / 3));
@@ -128,7 +128,7 @@ function notesOf(fits: readonly Fit[], scalesDiffer: boolean, rolled: RollingOri
   if (scalesDiffer)
     notes.push("The fits stand on different scales: those on the log scale are brought back by -sum ln(y).");
   if (fits.some((fit) => fit.groups.length > 1))
-    notes.push("AICc added over the groups, each with its own constants and sigma.");
+    notes.push("AICc added over the groups, each with its own parameters and sigma.");
   if (rolled === undefined)
     notes.push(
       "The record is too short to be forecast from its own earlier parts, or the fits are not of least squares.",

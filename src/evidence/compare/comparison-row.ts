@@ -1,13 +1,13 @@
 import type { Fit } from "../../estimate/index.js";
 
-/** One rival of a comparison. Sums run over the groups, each with its own constants and sigma. */
+/** One rival of a comparison. Sums run over the groups, each with its own parameters and sigma. */
 export interface ComparisonRow {
   /** Which of the fits given, from 0. */
   readonly place: number;
   readonly rule: string;
   /** n: values compared, of all groups. */
   readonly count: number;
-  readonly unknowns: number;
+  readonly parameters: number;
   readonly sumOfSquares: number;
   /** On the scale that the comparison states. */
   readonly logLikelihood: number;
@@ -19,7 +19,7 @@ export interface ComparisonRow {
   readonly difference: number;
   /** Akaike weight: exp(-difference/2), the rivals' weights adding up to 1. */
   readonly weight: number;
-  /** True where a constant of the rule is not determined by the record. */
+  /** True where a parameter of the rule is not determined by the record. */
   readonly undetermined: boolean;
 }
 
@@ -43,13 +43,13 @@ export function comparisonRows(fits: readonly Fit[], ownScale: boolean): readonl
 function rowOf(fit: Fit, place: number, ownScale: boolean): Omit<ComparisonRow, "difference" | "weight"> {
   const sum = (of: (group: GroupFit) => number): number =>
     fit.groups.reduce((total, group) => total + of(group), 0);
-  const jacobian = ownScale && fit.options.spread === "proportional" ? sum(logOfValues) : 0;
+  const jacobian = ownScale && fit.options.distribution === "lognormal" ? sum(logOfValues) : 0;
   const logLikelihood = sum((group) => group.criteria.logLikelihood) - jacobian;
   return {
     place,
     rule: fit.rule.text,
     count: sum((group) => group.count),
-    unknowns: sum((group) => group.estimates.length),
+    parameters: sum((group) => group.estimates.length),
     sumOfSquares: sum((group) => group.sumOfSquares),
     logLikelihood,
     aic: sum((group) => group.criteria.aic) + 2 * jacobian,

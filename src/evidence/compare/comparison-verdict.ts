@@ -47,7 +47,7 @@ function failingOf(fit: Fit, row: ComparisonRow, rolled: RollingOrigin | undefin
   const { own, naive } = naiveCriteria(fit);
   const best = naive.reduce((low, next) => (next.aicCorrected < low.aicCorrected ? next : low));
   if (best.aicCorrected <= own)
-    return `"${best.name}" explains the record as well as "${row.rule}" and needs fewer constants`;
+    return `"${best.name}" explains the record as well as "${row.rule}" and needs fewer parameters`;
   const scores = rolled?.scores[row.place];
   const worse = rolled?.scores.find(
     (other) => other.kind === "naive" && scores !== undefined && isWorse(scores.each, other.each, clearly),

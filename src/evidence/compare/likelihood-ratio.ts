@@ -2,11 +2,11 @@ import type { Fit } from "../../estimate/index.js";
 import { chiSquareCdf } from "../../numeric/index.js";
 import { nestingOf } from "./nesting.js";
 
-/** Whether constants that a smaller rule leaves out are worth having. */
+/** Whether parameters that a smaller rule leaves out are worth having. */
 export interface LikelihoodRatio {
   readonly smaller: string;
   readonly larger: string;
-  /** Constants of the larger rule, and the value at which it becomes the smaller. */
+  /** Parameters of the larger rule, and the value at which it becomes the smaller. */
   readonly at: Readonly<Record<string, number>>;
   /** Twice the difference of log-likelihoods. */
   readonly statistic: number;
@@ -28,7 +28,7 @@ export interface LikelihoodRatio {
 export function likelihoodRatios(fits: readonly Fit[]): readonly LikelihoodRatio[] {
   return fits.flatMap((smaller) =>
     fits.flatMap((larger) => {
-      if (smaller === larger || smaller.options.spread !== larger.options.spread) return [];
+      if (smaller === larger || smaller.options.distribution !== larger.options.distribution) return [];
       const nesting = nestingOf(smaller, larger);
       return nesting ? [ratioOf(smaller, larger, nesting.at)] : [];
     }),

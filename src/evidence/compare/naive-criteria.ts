@@ -9,7 +9,7 @@ export interface NaiveCriterion {
 /**
  * AICc of the naive rules, and of a fit on the same values: those that have a recorded value before them.
  *
- * "No change" carries the last value on (its only constant is sigma), "mean level" has each value scatter about one
+ * "No change" carries the last value on (its only parameter is sigma), "mean level" has each value scatter about one
  * level. A trajectory fit also compares its first value, which is left out here.
  *
  * @param from - first step index counted: 1, or more where rivals read past values and begin later.
@@ -21,7 +21,7 @@ export function naiveCriteria(
   readonly naive: readonly NaiveCriterion[];
   readonly own: number;
 } {
-  const log = fit.options.spread === "proportional";
+  const log = fit.options.distribution === "lognormal";
   const scaled = (value: number): number => (log ? Math.log(value) : value);
   const total = { own: 0, change: 0, level: 0 };
   for (const group of fit.groups) {

@@ -1,7 +1,7 @@
 import type { Fit, GroupFit } from "../../estimate/index.js";
 import { compileRule } from "../../rule/index.js";
 
-/** Variance that the uncertainty of the constants gives one cell of a path: g'Cg by its slopes g. */
+/** Variance that the uncertainty of the parameters gives one cell of a path: g'Cg by its slopes g. */
 export function spreadOf(
   group: GroupFit,
   columns: Int32Array,
@@ -30,24 +30,24 @@ export function carryVariance(
   { rule, options }: Fit,
   { sigma }: GroupFit,
   start: Float64Array,
-  constants: Float64Array,
+  parameters: Float64Array,
   inputs: readonly Float64Array[],
   from: number,
   periods: number,
 ): readonly Float64Array[] {
   const { pathWithSensitivities } = compileRule(rule);
   const slots = start.length;
-  const width = constants.length + slots;
-  const log = options.spread === "proportional";
+  const width = parameters.length + slots;
+  const log = options.distribution === "lognormal";
   const values = new Float64Array(2 * slots);
   const slopes = new Float64Array(2 * slots * width);
   let variance = new Float64Array(slots * slots);
   const state = start.slice();
   return Array.from({ length: periods }, (_, h) => {
-    pathWithSensitivities(state, constants, inputs, from + h, 1, values, slopes);
+    pathWithSensitivities(state, parameters, inputs, from + h, 1, values, slopes);
     state.set(values.subarray(slots));
     const slope = (row: number, column: number): number =>
-      slopes[(slots + row) * width + constants.length + column]!;
+      slopes[(slots + row) * width + parameters.length + column]!;
     variance = sandwich(slope, variance, slots);
     for (let s = 0; s < rule.states.length; s++)
       variance[s * slots + s] = variance[s * slots + s]! + (sigma * (log ? state[s]! : 1)) ** 2;

@@ -10,7 +10,7 @@ export interface Prediction {
 }
 
 /**
- * Predicts every state over the periods after the fitted record, with the uncertainty of the constants and the errors
+ * Predicts every state over the periods after the fitted record, with the uncertainty of the parameters and the errors
  * of single values, both carried along the path by their slopes.
  *
  * @param whole - the group with all its rows, whose inputs are taken as known.
@@ -24,38 +24,38 @@ export function predictAhead(
   periods: number,
 ): readonly (readonly Prediction[])[] | undefined {
   const { rule, options } = fit;
-  const plain = [undefined, "constant", "proportional"].includes(options.spread as string | undefined);
+  const plain = [undefined, "normal", "lognormal"].includes(options.distribution as string | undefined);
   if (options.errors === "both" || options.factor !== undefined || !plain) return undefined;
   const trained = fit.observations.groups.find((each) => each.name === group.group)!;
   const last = trained.index[trained.index.length - 1]!;
   const unknowns = unknownsOf(rule, options);
-  const constants = Float64Array.from(rule.constants, (name) => group.constants[name]!);
+  const parameters = Float64Array.from(rule.parameters, (name) => group.parameters[name]!);
   const slots = rule.states.length + rule.memory.length;
   const steps = options.errors === "process";
   const longest = rule.memory.reduce((most, { lag }) => Math.max(most, lag), 0);
   const start = steps ? lastValues(rule, trained) : unknowns.initial.slice();
   if (start === undefined) return undefined;
   group.estimates.forEach((estimate, i) => {
-    const slot = unknowns.columns[i]! - rule.constants.length;
+    const slot = unknowns.columns[i]! - rule.parameters.length;
     if (estimate.role === "initial") start[slot] = estimate.value;
   });
   const from = steps ? last : longest;
   const length = last + periods - from;
   const inputs = inputColumns(rule, whole, last + periods);
   const path = new Float64Array((length + 1) * slots);
-  const slopes = new Float64Array(path.length * (rule.constants.length + slots));
-  compileRule(rule).pathWithSensitivities(start, constants, inputs, from, length, path, slopes);
-  const noise = steps ? carryVariance(fit, group, start, constants, inputs, from, periods) : undefined;
-  const log = options.spread === "proportional";
+  const slopes = new Float64Array(path.length * (rule.parameters.length + slots));
+  compileRule(rule).pathWithSensitivities(start, parameters, inputs, from, length, path, slopes);
+  const noise = steps ? carryVariance(fit, group, start, parameters, inputs, from, periods) : undefined;
+  const log = options.distribution === "lognormal";
   const predicted = Array.from({ length: periods }, (_, h) =>
     rule.states.map((_, s) => {
       const cell = (length - periods + h + 1) * slots + s;
       const value = path[cell]!;
       const scale = log ? value : 1;
-      const ofConstants =
-        spreadOf(group, unknowns.columns, slopes, cell, constants.length + slots) / scale ** 2;
+      const ofParameters =
+        spreadOf(group, unknowns.columns, slopes, cell, parameters.length + slots) / scale ** 2;
       const ofErrors = noise === undefined ? group.sigma ** 2 : noise[h]![s]!;
-      return { mean: log ? Math.log(value) : value, deviation: Math.sqrt(ofConstants + ofErrors) };
+      return { mean: log ? Math.log(value) : value, deviation: Math.sqrt(ofParameters + ofErrors) };
     }),
   );
   const usable = predicted.every((row) =>

@@ -22,12 +22,12 @@ export function fitUntil(fit: Fit, name: string, origin: number): Fit | undefine
 /** The whole record's estimates only tell where to look first; the search ends at the optimum of what was known. */
 function startOf(fit: Fit, name: string): Record<string, number> {
   const estimates = fit.groups.find((each) => each.group === name)?.estimates ?? [];
-  const constants = estimates.filter((estimate) => estimate.role === "constant");
-  return Object.fromEntries(constants.map((estimate) => [estimate.name, estimate.value]));
+  const parameters = estimates.filter((estimate) => estimate.role === "parameter");
+  return Object.fromEntries(parameters.map((estimate) => [estimate.name, estimate.value]));
 }
 
 /**
- * Predicts the periods after row `origin` with the constants of a fit to that row or an earlier one.
+ * Predicts the periods after row `origin` with the parameters of a fit to that row or an earlier one.
  *
  * @param whole - the fit to the whole record, whose rows up to the origin are known.
  * @returns [periods][states]; undefined where the fit allows no prediction.

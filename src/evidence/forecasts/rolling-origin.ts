@@ -10,7 +10,7 @@ export interface RollingOrigin {
   /** Origins, from each of which every rival was fitted afresh. */
   readonly origins: number;
   /** Periods ahead, at most. */
-  readonly horizon: number;
+  readonly periods: number;
   /** Values that were forecast. */
   readonly forecasts: number;
   readonly level: number;
@@ -45,7 +45,7 @@ interface Target {
 export function rollingOrigin(fits: readonly Fit[], plan: OriginPlan): RollingOrigin | undefined {
   const [first] = fits;
   if (first === undefined) return undefined;
-  const logs = fits.map((fit) => fit.options.spread === "proportional");
+  const logs = fits.map((fit) => fit.options.distribution === "lognormal");
   const naive = naiveForecasts(logs[0]!);
   const made = first.observations.groups.flatMap((group) => {
     const last = group.index.length - 1;
@@ -71,7 +71,7 @@ export function rollingOrigin(fits: readonly Fit[], plan: OriginPlan): RollingOr
       plan.level,
     ),
   );
-  return { origins: made.length, horizon: plan.horizon, forecasts: scored.length, level: plan.level, scores };
+  return { origins: made.length, periods: plan.horizon, forecasts: scored.length, level: plan.level, scores };
 }
 
 /** What every rival and naive forecast said of each value after an origin; only values of which all said something. */

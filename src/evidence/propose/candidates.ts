@@ -7,7 +7,7 @@ export interface Candidate {
   readonly rule: Rule;
   /** False where the rule speaks of positive levels only. */
   readonly anyLevel: boolean;
-  /** Shape constants beyond these values cannot be told from a limit that is a rule of its own. */
+  /** Shape parameters beyond these values cannot be told from a limit that is a rule of its own. */
   readonly bounds: Readonly<Record<string, readonly [number, number]>>;
 }
 
@@ -65,7 +65,7 @@ function leftOut(caught: boolean): readonly NotTried[] {
   const because = (reason: string, ...names: string[]): NotTried[] => names.map((name) => ({ name, reason }));
   return [
     ...because("is the affine rule with other names", "dosing"),
-    ...because("is Beverton-Holt with constants that one record cannot tell apart", "chemostat", "transfer"),
+    ...because("is Beverton-Holt with parameters that one record cannot tell apart", "chemostat", "transfer"),
     ...because("has a state that is not recorded", "baranyi", "resource"),
     ...because("works on logarithms and needs the length of a step in hours", "threePhase"),
     ...because("needs two recorded states", "nicholsonBailey", "clumpedParasitoid", "competition"),
@@ -79,7 +79,7 @@ function leftOut(caught: boolean): readonly NotTried[] {
       "inventory",
     ),
     ...because("needs a stated target or delay", "gapCorrection", "adultsAndRecruits"),
-    ...because("has a shape constant that the catch alone rarely identifies", "pellaTomlinson"),
+    ...because("has a shape parameter that the catch alone rarely identifies", "pellaTomlinson"),
     ...(caught ? [] : because('needs the catch recorded as the input "C"', "schaefer", "fox")),
   ];
 }

@@ -28,14 +28,14 @@ export interface ProposedRule {
   readonly name: string;
   readonly rule: string;
   readonly errors: "process" | "observation";
-  readonly unknowns: number;
+  readonly parameters: number;
   readonly aicCorrected: number;
   /** Above the lowest with the same kind of error. */
   readonly difference: number;
   /** Mean ranked probability score on the last fifth, fitted to the rows before it; undefined where not computed. */
   readonly heldOut: number | undefined;
   readonly supported: boolean;
-  /** Constants that the record does not determine; filled for supported rules. */
+  /** Parameters that the record does not determine; filled for supported rules. */
   readonly undetermined: readonly string[];
   /** Why it is not supported; "" where it is. */
   readonly reason: string;
@@ -72,7 +72,7 @@ export interface Proposal {
  * A record with a single input is read with it as the catch, "C", of the harvest rules.
  *
  * @throws {ModelError} `several-states` | `nothing-fits` | `exact-fit`.
- * @example propose(counts, { spread: "proportional" }).verdict.kind; // "undecided"
+ * @example propose(counts, { distribution: "lognormal" }).verdict.kind; // "undecided"
  */
 export function propose(observations: Observations, options: ProposeOptions = {}): Proposal {
   const { state, errors, seed = 1, ...others } = options;
@@ -80,11 +80,11 @@ export function propose(observations: Observations, options: ProposeOptions = {}
   const positive = record.groups.every((group) =>
     Object.values(group.values)[0]!.every((value) => value > 0),
   );
-  const spread = others.spread ?? (positive ? "proportional" : "constant");
+  const distribution = others.distribution ?? (positive ? "lognormal" : "normal");
   const { candidates, left } = candidatesFor(record.inputs);
   const usable = candidates.filter((candidate) => positive || candidate.anyLevel);
   const kinds = errors === undefined ? (["process", "observation"] as const) : [errors];
-  const settings = { ...others, spread };
+  const settings = { ...others, distribution };
   const { tried, failed } = tryRules(usable, record, kinds, settings);
   if (tried.length === 0) throw refuseNothingFits(failed[0]?.reason ?? "no rule suits its levels");
   for (const { fit } of tried) refuseExact(fit);
@@ -144,7 +144,7 @@ function rowOf(standing: Standing, heldOut: number | undefined, beatenBy: string
     name: tried.name,
     rule: tried.fit.rule.text,
     errors: tried.errors,
-    unknowns: tried.unknowns,
+    parameters: tried.unknowns,
     aicCorrected: tried.aicCorrected,
     difference,
     heldOut,
@@ -154,7 +154,7 @@ function rowOf(standing: Standing, heldOut: number | undefined, beatenBy: string
   };
 }
 
-/** A supported rule with its fit done again with intervals, which tell the constants that are not determined. */
+/** A supported rule with its fit done again with intervals, which tell the parameters that are not determined. */
 function withFit(
   row: ProposedRule,
   tried: readonly Tried[],

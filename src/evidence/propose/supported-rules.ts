@@ -8,7 +8,7 @@ import type { Tried } from "./try-rules.js";
 export const supportedWithin = 4;
 /** Lead over every naive rule below which no rule of change is called for. */
 export const aheadOfNaive = 4;
-/** Log-likelihood that a further constant must bring: less is what chance brings (half of AIC's price of 2). */
+/** Log-likelihood that a further parameter must bring: less is what chance brings (half of AIC's price of 2). */
 const worthwhile = 1;
 
 /** What became of a rule that was tried. */
@@ -23,10 +23,10 @@ export interface Standing {
 
 /**
  * Judges the rules tried with one kind of error: supported are those within 4 of the lowest AICc that lie ahead of every
- * naive rule, without those whose further constants bring no likelihood over a simpler supported one.
+ * naive rule, without those whose further parameters bring no likelihood over a simpler supported one.
  *
  * @see Burnham, K. P. and Anderson, D. R. (2002), Model Selection and Multimodel Inference, section 2.12.3 (a further
- *   constant that does not raise the likelihood), 6.9.3 (many rules tried).
+ *   parameter that does not raise the likelihood), 6.9.3 (many rules tried).
  */
 export function supportedRules(tried: readonly Tried[]): readonly Standing[] {
   const sorted = [...tried].sort((a, b) => a.aicCorrected - b.aicCorrected);

@@ -14,7 +14,7 @@ export type RecordDrawer = (stream: RandomStream, out: Float64Array) => boolean;
 export function recordDrawer(fit: Fit, { rows, recorded, at }: Refitter, sigma: number): RecordDrawer {
   const states = fit.rule.states.length;
   const steps = fit.options.errors === "process";
-  const log = fit.options.spread === "proportional";
+  const log = fit.options.distribution === "lognormal";
   const usable = log ? (value: number) => value > 0 && value < Infinity : Number.isFinite;
   const drawn = (i: number, stream: RandomStream): number => {
     rows.residualAt(i);

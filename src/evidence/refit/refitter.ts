@@ -32,7 +32,7 @@ export interface Refitter {
  */
 export function refitter(fit: Fit, group: GroupFit): Refitter | undefined {
   const { rule, options } = fit;
-  const { spread } = options;
+  const { distribution: spread } = options;
   const counted = spread === "poisson" || spread === "negative-binomial";
   const recordedGroup = fit.observations.groups.find((each) => each.name === group.group);
   const censored = Object.values(recordedGroup?.censoring ?? {}).some((marks) =>

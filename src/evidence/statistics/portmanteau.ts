@@ -12,7 +12,7 @@ export interface ChiSquareTest {
  * Whether the first `lags` autocorrelations together are larger than chance: Q = n(n+2) sum r_k^2 / (n-k).
  *
  * @param series - one value a period, NaN where there is none.
- * @param fitted - constants of a fitted autoregression, taken off the degrees of freedom; default 0.
+ * @param fitted - parameters of a fitted autoregression, taken off the degrees of freedom; default 0.
  * @see Ljung, G. M. and Box, G. E. P. (1978), On a measure of lack of fit in time series models, Biometrika 65.
  */
 export function ljungBox(series: ArrayLike<number>, lags: number, fitted = 0): ChiSquareTest {

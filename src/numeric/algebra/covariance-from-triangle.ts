@@ -2,17 +2,17 @@ import { pivotedTriangle } from "./pivoted-triangle.js";
 
 /** The inverse of R'R as far as it exists. */
 export interface UnscaledCovariance {
-  /** (R'R)^-1, row-major [size, size]; rows and columns of constants that are not determined are NaN. */
+  /** (R'R)^-1, row-major [size, size]; rows and columns of parameters that are not determined are NaN. */
   readonly covariance: Float64Array;
-  /** False for a constant that some change of the constants together leaves without effect on the residuals. */
+  /** False for a parameter that some change of the parameters together leaves without effect on the residuals. */
   readonly determined: readonly boolean[];
   readonly rank: number;
 }
 
 /**
- * Inverts R'R = J'J as far as the residuals determine the constants. Multiplied by sigma^2 it is their covariance.
+ * Inverts R'R = J'J as far as the residuals determine the parameters. Multiplied by sigma^2 it is their covariance.
  *
- * The columns are first brought to length 1, so that units do not matter; a constant with a part in the null
+ * The columns are first brought to length 1, so that units do not matter; a parameter with a part in the null
  * space of J is not determined, and no number is made up for it.
  *
  * @param tolerance - a column whose part not explained by the others is shorter than this counts as dependent:
@@ -26,7 +26,7 @@ export function covarianceFromTriangle(
   const { order, lengths, pivoted } = pivotedTriangle(triangle, size);
   const rank = rankOf(pivoted, size, tolerance);
   const inverse = inverseOfTriangle(pivoted, rank, size);
-  const determined = determinedConstants(inverse, pivoted, order, lengths, rank, size);
+  const determined = determinedParameters(inverse, pivoted, order, lengths, rank, size);
   const covariance = new Float64Array(size * size).fill(Number.NaN);
   for (let a = 0; a < rank; a++) {
     for (let b = 0; b < rank; b++) {
@@ -60,8 +60,8 @@ function inverseOfTriangle(triangle: Float64Array, rank: number, size: number): 
   return inverse;
 }
 
-/** Constants without a part in the null space, whose basis is [-R11^-1 R12; I] in the order of the pivots. */
-function determinedConstants(
+/** Parameters without a part in the null space, whose basis is [-R11^-1 R12; I] in the order of the pivots. */
+function determinedParameters(
   inverse: Float64Array,
   pivoted: Float64Array,
   order: Int32Array,

@@ -11,16 +11,16 @@ export interface Bounds {
 }
 
 /**
- * Marks in `workspace.held` the constants that sit on a bound with the sum of squares falling outwards, and
+ * Marks in `workspace.held` the parameters that sit on a bound with the sum of squares falling outwards, and
  * makes the triangle of the others.
  *
- * @returns how many constants may move.
+ * @returns how many parameters may move.
  */
 export function holdAtBounds(
   workspace: SquaresWorkspace,
   triangle: Float64Array,
   projected: Float64Array,
-  constants: Float64Array,
+  parameters: Float64Array,
   bounds: Bounds,
 ): number {
   const { held, gradient, size } = workspace;
@@ -28,15 +28,15 @@ export function holdAtBounds(
     let slope = 0;
     for (let i = 0; i <= j; i++) slope += triangle[i * size + j]! * projected[i]!;
     gradient[j] = slope;
-    const atLower = constants[j]! <= bounds.lower[j]! && slope >= 0;
-    const atUpper = constants[j]! >= bounds.upper[j]! && slope <= 0;
+    const atLower = parameters[j]! <= bounds.lower[j]! && slope >= 0;
+    const atUpper = parameters[j]! >= bounds.upper[j]! && slope <= 0;
     held[j] = atLower || atUpper ? 1 : 0;
     workspace.step[j] = 0;
   }
   return triangleOfFree(workspace, triangle, projected);
 }
 
-/** Triangle, right-hand side and scale of the constants not held, those held being moved by `workspace.step`. */
+/** Triangle, right-hand side and scale of the parameters not held, those held being moved by `workspace.step`. */
 export function triangleOfFree(
   workspace: SquaresWorkspace,
   triangle: Float64Array,
@@ -66,17 +66,17 @@ function listFree(workspace: SquaresWorkspace): number {
 }
 
 /**
- * The trust-region step that stays inside the bounds: constants whose step would cross a bound are moved onto
+ * The trust-region step that stays inside the bounds: parameters whose step would cross a bound are moved onto
  * it and held there, and the others find their step anew, until none crosses. Where that does not promise a
  * reduction, the step follows the scaled gradient, bent at the bounds. Written to `workspace.step`.
  *
- * @param count - constants that may move, as `holdAtBounds` returned it.
+ * @param count - parameters that may move, as `holdAtBounds` returned it.
  * @returns the damping used.
  */
 export function boundedStep(
   workspace: SquaresWorkspace,
   system: LinearisedSystem,
-  constants: Float64Array,
+  parameters: Float64Array,
   bounds: Bounds,
   count: number,
   radius: number,
@@ -92,22 +92,22 @@ export function boundedStep(
     crossed = false;
     for (let k = 0; k < moving; k++) {
       const j = free[k]!;
-      const end = within(constants[j]! + freeStep[k]!, bounds, j);
-      crossed ||= end !== constants[j]! + freeStep[k]!;
-      step[j] = end - constants[j]!;
-      if (end !== constants[j]! + freeStep[k]!) held[j] = 1;
+      const end = within(parameters[j]! + freeStep[k]!, bounds, j);
+      crossed ||= end !== parameters[j]! + freeStep[k]!;
+      step[j] = end - parameters[j]!;
+      if (end !== parameters[j]! + freeStep[k]!) held[j] = 1;
     }
     if (crossed) moving = triangleOfFree(workspace, triangle, projected);
   }
   if (!(predictedReduction(triangle, projected, step) > 0)) {
-    gradientStep(workspace, constants, bounds, radius);
+    gradientStep(workspace, parameters, bounds, radius);
   }
   return damping;
 }
 
 function gradientStep(
   workspace: SquaresWorkspace,
-  constants: Float64Array,
+  parameters: Float64Array,
   bounds: Bounds,
   radius: number,
 ): void {
@@ -116,12 +116,12 @@ function gradientStep(
   for (let j = 0; j < size; j++) length += (gradient[j]! / scale[j]!) ** 2;
   const reach = radius / Math.sqrt(length);
   for (let j = 0; j < size; j++) {
-    const end = constants[j]! - (reach * gradient[j]!) / scale[j]! ** 2;
-    step[j] = within(end, bounds, j) - constants[j]!;
+    const end = parameters[j]! - (reach * gradient[j]!) / scale[j]! ** 2;
+    step[j] = within(end, bounds, j) - parameters[j]!;
   }
 }
 
-/** The value, or the bound of constant j that it lies beyond. */
+/** The value, or the bound of parameter j that it lies beyond. */
 export function within(value: number, bounds: Bounds, j: number): number {
   return Math.min(Math.max(value, bounds.lower[j]!), bounds.upper[j]!);
 }

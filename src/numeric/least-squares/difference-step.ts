@@ -6,15 +6,15 @@ export const relativeStep: number = Math.cbrt(Number.EPSILON);
 const agreed = 1e-5;
 
 /**
- * The step for central differences of constant j: relative to its typical size, and smaller where the function
- * bends within that. A constant at 0 of unknown size gets the step, among powers of a hundred, at which the
+ * The step for central differences of parameter j: relative to its typical size, and smaller where the function
+ * bends within that. A parameter at 0 of unknown size gets the step, among powers of a hundred, at which the
  * derivative depends on the step least.
  *
- * @param size - typical size of the constant; 0 when unknown.
+ * @param size - typical size of the parameter; 0 when unknown.
  */
 export function differenceStep(
   problem: DifferenceProblem,
-  constants: Float64Array,
+  parameters: Float64Array,
   j: number,
   size: number,
 ): number {
@@ -28,8 +28,8 @@ export function differenceStep(
   let least = Number.POSITIVE_INFINITY;
   for (const step of candidates) {
     const known =
-      centralSlope(problem, constants, j, step, wide) &&
-      centralSlope(problem, constants, j, step / 4, narrow);
+      centralSlope(problem, parameters, j, step, wide) &&
+      centralSlope(problem, parameters, j, step / 4, narrow);
     // A function that does not answer to so small a step tells nothing about it.
     const apart = known && narrow.some((slope) => slope !== 0) ? disagreement(wide, narrow) : Infinity;
     if (apart < least) {

@@ -11,7 +11,7 @@ const halvings = 10;
  */
 export function extrapolatedSlope(
   problem: DifferenceProblem,
-  constants: Float64Array,
+  parameters: Float64Array,
   j: number,
   widest: number,
   column: Float64Array,
@@ -20,7 +20,7 @@ export function extrapolatedSlope(
   let least = Number.POSITIVE_INFINITY;
   for (let k = 0; k <= halvings; k++) {
     const first = new Float64Array(problem.rows);
-    if (!centralSlope(problem, constants, j, widest / 2 ** k, first)) {
+    if (!centralSlope(problem, parameters, j, widest / 2 ** k, first)) {
       before = [];
       continue;
     }

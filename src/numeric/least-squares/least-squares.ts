@@ -6,23 +6,23 @@ import { type ResidualSystem, residualSystem } from "./residual-system.js";
 
 /** A least-squares problem stated by its residuals. */
 export interface LeastSquaresProblem {
-  /** Residuals [rows] at constants [size]; NaN where the model is not defined. */
-  readonly residuals: (constants: Float64Array) => ArrayLike<number>;
-  /** Derivative of every residual by every constant, row-major [rows, size]; by differences when absent. */
-  readonly jacobian?: (constants: Float64Array) => ArrayLike<number>;
+  /** Residuals [rows] at parameters [size]; NaN where the model is not defined. */
+  readonly residuals: (parameters: Float64Array) => ArrayLike<number>;
+  /** Derivative of every residual by every parameter, row-major [rows, size]; by differences when absent. */
+  readonly jacobian?: (parameters: Float64Array) => ArrayLike<number>;
   readonly start: ArrayLike<number>;
   /** Lowest and highest admitted values; open when absent. */
   readonly lower?: ArrayLike<number>;
   readonly upper?: ArrayLike<number>;
-  /** Typical size of each constant, for difference steps about 0; by default its own value tells. */
+  /** Typical size of each parameter, for difference steps about 0; by default its own value tells. */
   readonly scale?: ArrayLike<number>;
 }
 
-/** The constants of least sum of squares, how well they are known, and why the search stopped. */
+/** The parameters of least sum of squares, how well they are known, and why the search stopped. */
 export interface LeastSquaresSolution {
   readonly kind: "least-squares";
   readonly estimates: Float64Array;
-  /** In the units of the constants; undefined = not determined by these residuals. */
+  /** In the units of the parameters; undefined = not determined by these residuals. */
   readonly standardErrors: readonly (number | undefined)[];
   /** Row-major [size, size]; NaN where not determined. */
   readonly covariance: Float64Array;
@@ -30,7 +30,7 @@ export interface LeastSquaresSolution {
   readonly sumOfSquares: number;
   /** sumOfSquares / (rows - size); undefined when no residual is left over. */
   readonly variance: number | undefined;
-  /** Number of constants, or combinations of them, that the residuals determine at the solution. */
+  /** Number of parameters, or combinations of them, that the residuals determine at the solution. */
   readonly rank: number;
   readonly stop: StopReason;
   /** Calls of the residual function, those for differences included. */
@@ -44,14 +44,14 @@ export interface LeastSquaresSolution {
 const reaches = [100, 1, 0.1];
 
 /**
- * Finds the constants that minimise the sum of squared residuals.
+ * Finds the parameters that minimise the sum of squared residuals.
  *
  * Minimises S(c) = sum_i r_i(c)^2 by a trust-region Levenberg-Marquardt search (`minimiseSquares`) on a QR
  * factorisation, from the start with several first step lengths. Without a Jacobian, central differences
- * relative to the constants are used, extrapolated at the end, so that data in any units give the same digits.
- * Covariance is s^2 (J'J)^-1 with s^2 = S/(rows - size); a constant that J does not determine has none.
+ * relative to the parameters are used, extrapolated at the end, so that data in any units give the same digits.
+ * Covariance is s^2 (J'J)^-1 with s^2 = S/(rows - size); a parameter that J does not determine has none.
  *
- * @throws {ModelError} `too-few-residuals`, `bad-start`, `bad-bounds`, `other-number-of-constants`,
+ * @throws {ModelError} `too-few-residuals`, `bad-start`, `bad-bounds`, `other-number-of-parameters`,
  *   `residuals-of-other-length`, `jacobian-of-other-shape`.
  * @see Moré (1978); Bates and Watts (1988), Nonlinear Regression Analysis and Its Applications, chapter 2.
  * @example

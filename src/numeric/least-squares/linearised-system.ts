@@ -12,8 +12,8 @@ export interface LinearisedSystem {
   readonly triangle: Float64Array;
   /** z [size]. */
   readonly projected: Float64Array;
-  /** The sum of squares at the constants; not finite where the model breaks down. */
-  readonly evaluate: (constants: Float64Array) => number;
+  /** The sum of squares at the parameters; not finite where the model breaks down. */
+  readonly evaluate: (parameters: Float64Array) => number;
   /** Fills `triangle` and `projected` at the point evaluated last; false where the Jacobian is not finite. */
-  readonly linearise: (constants: Float64Array) => boolean;
+  readonly linearise: (parameters: Float64Array) => boolean;
 }

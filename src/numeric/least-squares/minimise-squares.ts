@@ -7,12 +7,12 @@ import { scaledLength } from "./trust-region-step.js";
 
 /** When the search stops and how far it may reach; every tolerance is relative and has no unit. */
 export interface MinimiseOptions {
-  /** Lowest and highest admitted values [size]; open when absent. A constant with equal bounds is held there. */
+  /** Lowest and highest admitted values [size]; open when absent. A parameter with equal bounds is held there. */
   readonly lower?: Float64Array;
   readonly upper?: Float64Array;
   /** Stops when the residuals' part along the Jacobian is below this share of their length; default 1e-10. */
   readonly gradientTolerance?: number;
-  /** Stops when a step is below this share of the constants, both scaled; default 1e-13. */
+  /** Stops when a step is below this share of the parameters, both scaled; default 1e-13. */
   readonly stepTolerance?: number;
   /** Default 1000. */
   readonly iterationLimit?: number;
@@ -34,8 +34,8 @@ export interface Minimum {
 const outOfIterations: StopReason = Object.freeze({ kind: "iteration-limit" });
 
 /**
- * Finds the constants of least sum of squares by the trust-region Levenberg-Marquardt method. A step that does not reduce the sum enough is refused and the trust radius cut;
- * each constant is scaled by the largest column of the Jacobian met, so that units do not matter; bounds are
+ * Finds the parameters of least sum of squares by the trust-region Levenberg-Marquardt method. A step that does not reduce the sum enough is refused and the trust radius cut;
+ * each parameter is scaled by the largest column of the Jacobian met, so that units do not matter; bounds are
  * met by an active set. Near the optimum, where rounding hides changes of the sum, undamped steps are taken as
  * long as they shrink.
  *
@@ -57,12 +57,12 @@ export function minimiseSquares(
   const { gradientTolerance = 1e-10, stepTolerance = 1e-13, iterationLimit = 1000, reach = 100 } = options;
   const workspace = options.workspace ?? squaresWorkspace(system.size);
   const bounds = boundsOf(options, system.size);
-  const constants = start.slice();
+  const parameters = start.slice();
   if (bounds !== undefined)
-    for (let j = 0; j < system.size; j++) constants[j] = within(constants[j]!, bounds, j);
+    for (let j = 0; j < system.size; j++) parameters[j] = within(parameters[j]!, bounds, j);
   const at: Search = {
-    constants,
-    sum: system.evaluate(constants),
+    parameters,
+    sum: system.evaluate(parameters),
     radius: reach,
     damping: 0,
     evaluations: 1,
@@ -76,19 +76,19 @@ export function minimiseSquares(
     return ended(at, { kind: "failed", reason: "the model is not finite at the start" });
   workspace.scale.fill(0);
   let stop = settle(problem, at);
-  at.radius = reach * scaledLength(workspace.scale, constants, system.size) || reach;
+  at.radius = reach * scaledLength(workspace.scale, parameters, system.size) || reach;
   while (stop === undefined) stop = at.evaluations > iterationLimit ? outOfIterations : tryStep(problem, at);
   return ended(at, stop);
 }
 
-/** The workspace with the system's own triangle in place of that of the constants that may move, which are all. */
+/** The workspace with the system's own triangle in place of that of the parameters that may move, which are all. */
 function onSystem(workspace: SquaresWorkspace, { triangle, projected }: LinearisedSystem): SquaresWorkspace {
   return { ...workspace, triangle, projected, freeScale: workspace.scale, freeStep: workspace.step };
 }
 
 function ended(at: Search, stop: StopReason): Minimum {
   return {
-    estimates: at.constants,
+    estimates: at.parameters,
     stop,
     sumOfSquares: at.sum,
     iterations: at.iterations,

@@ -5,14 +5,14 @@ import { centralSlope, type DifferenceProblem, oneSidedSlope } from "./finite-di
 import type { LinearisedSystem } from "./linearised-system.js";
 import { triangularise } from "./triangularise.js";
 
-/** Residuals as functions of the constants, with what is known about their derivatives. */
+/** Residuals as functions of the parameters, with what is known about their derivatives. */
 export interface ResidualProblem {
-  readonly residuals: (constants: Float64Array) => ArrayLike<number>;
-  readonly jacobian: ((constants: Float64Array) => ArrayLike<number>) | undefined;
+  readonly residuals: (parameters: Float64Array) => ArrayLike<number>;
+  readonly jacobian: ((parameters: Float64Array) => ArrayLike<number>) | undefined;
   readonly rows: number;
   readonly lower: Float64Array;
   readonly upper: Float64Array;
-  /** Typical size of each constant; 0 where only its value tells. */
+  /** Typical size of each parameter; 0 where only its value tells. */
   readonly scale: Float64Array;
 }
 
@@ -21,7 +21,7 @@ export interface ResidualSystem extends LinearisedSystem {
   /** Residuals at the point evaluated last. */
   readonly residuals: Float64Array;
   /** Chooses the difference steps anew at a point; `fine` extrapolates the differences from then on. */
-  readonly chooseSteps: (constants: Float64Array, fine: boolean) => void;
+  readonly chooseSteps: (parameters: Float64Array, fine: boolean) => void;
   readonly evaluations: () => number;
 }
 
@@ -42,21 +42,21 @@ export function residualSystem(problem: ResidualProblem): ResidualSystem {
   let evaluations = 0;
   let extrapolates = false;
 
-  const sample = (constants: Float64Array, into: Float64Array): boolean => {
+  const sample = (parameters: Float64Array, into: Float64Array): boolean => {
     evaluations++;
-    const values = problem.residuals(constants.slice());
+    const values = problem.residuals(parameters.slice());
     if (values.length !== rows) throw residualsOfOtherLength(rows, values.length);
     into.set(values);
     return into.every(Number.isFinite);
   };
   const differences: DifferenceProblem = { sample, rows, lower: problem.lower, upper: problem.upper };
 
-  const difference = (constants: Float64Array, j: number, column: Float64Array): boolean => {
-    const step = Math.max(shares[j]! * Math.abs(constants[j]!), least[j]!);
+  const difference = (parameters: Float64Array, j: number, column: Float64Array): boolean => {
+    const step = Math.max(shares[j]! * Math.abs(parameters[j]!), least[j]!);
     return (
-      (extrapolates && extrapolatedSlope(differences, constants, j, widening * step, column)) ||
-      centralSlope(differences, constants, j, step, column) ||
-      oneSidedSlope(differences, constants, j, step, column)
+      (extrapolates && extrapolatedSlope(differences, parameters, j, widening * step, column)) ||
+      centralSlope(differences, parameters, j, step, column) ||
+      oneSidedSlope(differences, parameters, j, step, column)
     );
   };
   return {
@@ -65,24 +65,24 @@ export function residualSystem(problem: ResidualProblem): ResidualSystem {
     projected,
     residuals,
     evaluations: () => evaluations,
-    evaluate(constants) {
-      if (!sample(constants, residuals)) return Number.POSITIVE_INFINITY;
+    evaluate(parameters) {
+      if (!sample(parameters, residuals)) return Number.POSITIVE_INFINITY;
       return residuals.reduce((sum, residual) => sum + residual * residual, 0);
     },
-    linearise(constants) {
-      if (problem.jacobian !== undefined) copyColumns(problem.jacobian(constants.slice()), columns, rows);
-      else if (!columns.every((column, j) => difference(constants, j, column))) return false;
+    linearise(parameters) {
+      if (problem.jacobian !== undefined) copyColumns(problem.jacobian(parameters.slice()), columns, rows);
+      else if (!columns.every((column, j) => difference(parameters, j, column))) return false;
       carried.set(residuals);
       return triangularise(columns, carried, triangle, projected);
     },
-    chooseSteps(constants, fine) {
+    chooseSteps(parameters, fine) {
       if (problem.jacobian !== undefined) return;
       extrapolates = fine;
       for (let j = 0; j < size; j++) {
-        const typical = Math.max(Math.abs(constants[j]!), scale[j]!);
-        const step = differenceStep(differences, constants, j, typical);
+        const typical = Math.max(Math.abs(parameters[j]!), scale[j]!);
+        const step = differenceStep(differences, parameters, j, typical);
         shares[j] = typical > 0 ? step / typical : relativeStep;
-        // A constant on its way through 0 keeps a step that can still be seen.
+        // A parameter on its way through 0 keeps a step that can still be seen.
         least[j] = scale[j]! > 0 || typical === 0 ? step : 1e-4 * step;
       }
     },

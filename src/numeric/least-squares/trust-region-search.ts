@@ -18,13 +18,13 @@ export interface SearchProblem {
 
 /** Where a search stands. */
 export interface Search {
-  readonly constants: Float64Array;
+  readonly parameters: Float64Array;
   sum: number;
   radius: number;
   damping: number;
   evaluations: number;
   iterations: number;
-  /** Constants that may move. */
+  /** Parameters that may move. */
   count: number;
   /** Length of the last step taken near the optimum, where rounding hides changes of the sum. */
   lastRefinement: number;
@@ -47,10 +47,10 @@ const rounding = 2 * Number.EPSILON;
 /** Takes up the linear model of the system at the point reached; says whether it is the optimum. */
 export function settle(problem: SearchProblem, at: Search): StopReason | undefined {
   const { system, bounds, workspace } = problem;
-  if (!system.linearise(at.constants)) return derivativesLost;
+  if (!system.linearise(at.parameters)) return derivativesLost;
   growScale(workspace, system.triangle);
   if (bounds !== undefined) {
-    at.count = holdAtBounds(workspace, system.triangle, system.projected, at.constants, bounds);
+    at.count = holdAtBounds(workspace, system.triangle, system.projected, at.parameters, bounds);
   } else {
     at.count = system.size;
   }
@@ -66,7 +66,7 @@ export function tryStep(problem: SearchProblem, at: Search): StopReason | undefi
   findStep(problem, at);
   const length = scaledLength(scale, step, size);
   if (at.evaluations === 1) at.radius = Math.min(at.radius, length);
-  for (let j = 0; j < size; j++) trial[j] = at.constants[j]! + step[j]!;
+  for (let j = 0; j < size; j++) trial[j] = at.parameters[j]! + step[j]!;
   const sum = system.evaluate(trial);
   at.evaluations++;
   const actual = sum < 100 * at.sum ? 1 - sum / at.sum : -1;
@@ -93,7 +93,7 @@ function refine(
 }
 
 function move(problem: SearchProblem, at: Search, sum: number): StopReason | undefined {
-  for (let j = 0; j < at.constants.length; j++) at.constants[j] = problem.workspace.trial[j]!;
+  for (let j = 0; j < at.parameters.length; j++) at.parameters[j] = problem.workspace.trial[j]!;
   at.sum = sum;
   at.iterations++;
   return settle(problem, at);
@@ -102,7 +102,7 @@ function move(problem: SearchProblem, at: Search, sum: number): StopReason | und
 function findStep(problem: SearchProblem, at: Search): void {
   const { system, bounds, workspace } = problem;
   if (bounds !== undefined) {
-    at.damping = boundedStep(workspace, system, at.constants, bounds, at.count, at.radius, at.damping);
+    at.damping = boundedStep(workspace, system, at.parameters, bounds, at.count, at.radius, at.damping);
     return;
   }
   at.damping = trustRegionStep(problem.steps, at.count, at.radius, at.damping);
@@ -135,18 +135,18 @@ function cutAfter(problem: SearchProblem, actual: number, sum: number): number {
 
 function tooSmall(problem: SearchProblem, at: Search, length: number): StopReason | undefined {
   const { workspace, stepTolerance } = problem;
-  const least = stepTolerance * scaledLength(workspace.scale, at.constants, workspace.size);
+  const least = stepTolerance * scaledLength(workspace.scale, at.parameters, workspace.size);
   return length <= least ? byStep : undefined;
 }
 
-/** Length of the residuals' part along the Jacobian of the constants that may move. */
+/** Length of the residuals' part along the Jacobian of the parameters that may move. */
 function offset(workspace: SquaresWorkspace, count: number): number {
   let sum = 0;
   for (let i = 0; i < count; i++) sum += workspace.projected[i]! * workspace.projected[i]!;
   return Math.sqrt(sum);
 }
 
-/** Scales never shrink, so that a constant that once mattered does not run away where it matters less. */
+/** Scales never shrink, so that a parameter that once mattered does not run away where it matters less. */
 function growScale(workspace: SquaresWorkspace, triangle: Float64Array): void {
   const { scale, size } = workspace;
   for (let j = 0; j < size; j++) {

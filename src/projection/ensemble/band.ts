@@ -2,9 +2,9 @@ import { quantile } from "../../numeric/index.js";
 import { placeRanks } from "./order-statistics.js";
 
 /**
- * A band across draws, period by period. `mean path` carries the uncertainty of the constants only; `future
+ * A band across draws, period by period. `mean path` carries the uncertainty of the parameters only; `future
  * observation` adds the errors of the process or of the reading; `simulated path` carries the random change alone, at
- * given constants. None is an interval for a constant.
+ * given parameters. None is an interval for a parameter.
  */
 export interface Band {
   readonly kind: "mean path" | "future observation" | "simulated path";

@@ -5,13 +5,13 @@ import { blockSize } from "./block-streams.js";
 import { endOutside, finiteLimits, unlimited } from "./limits.js";
 import { type Scatter, scatterer } from "./scatter.js";
 
-/** Where every path of an ensemble begins: its constants and its state vector, one row a path. */
+/** Where every path of an ensemble begins: its parameters and its state vector, one row a path. */
 export interface Starts {
   readonly paths: number;
-  /** How many constants the rule has. */
+  /** How many parameters the rule has. */
   readonly size: number;
   /** [paths, size], or [1, size] where all paths share them. */
-  readonly constants: Float64Array;
+  readonly parameters: Float64Array;
   /** [paths, width], or [1, width] where all paths begin alike. */
   readonly initial: Float64Array;
 }
@@ -37,8 +37,8 @@ export interface EnsembleRun {
   readonly spread?: Float64Array | undefined;
   /** One a block of paths; see `blockStreams`. */
   readonly streams: readonly RandomStream[];
-  /** Told of every step before it is taken: the path, its state vector and constants, and the absolute period. */
-  readonly onStep?: (path: number, state: Float64Array, constants: Float64Array, t: number) => void;
+  /** Told of every step before it is taken: the path, its state vector and parameters, and the absolute period. */
+  readonly onStep?: (path: number, state: Float64Array, parameters: Float64Array, t: number) => void;
   /** Takes the values of all paths at row `t`, [states][paths]; NaN where a path has ended. Not to be kept; may be reordered. */
   readonly onRow: (t: number, values: readonly Float64Array[]) => void;
   /** Called after every block of a period; what it throws ends the run. */
@@ -92,10 +92,10 @@ function advanceBlock(
   const { compiled, inputs, starts, width, change } = run;
   const from = run.from + t - 1;
   const random = change.some((draw) => draw !== undefined);
-  const advance = starts.constants.length === starts.size ? compiled.advance : compiled.advanceEach;
+  const advance = starts.parameters.length === starts.size ? compiled.advance : compiled.advanceEach;
   if (run.onStep !== undefined) tellSteps(run, present, first, last, from);
   // Random change may bring a value back, so limits count after it.
-  advance(present, first, last, starts.constants, inputs, from, random ? unlimited(limits.length) : limits);
+  advance(present, first, last, starts.parameters, inputs, from, random ? unlimited(limits.length) : limits);
   if (!random) return;
   change.forEach((draw, s) => {
     if (draw !== undefined) scatter(draw, present, first * width + s, width, last - first, block);
@@ -113,7 +113,7 @@ function tellSteps(run: EnsembleRun, present: Float64Array, first: number, last:
   for (let path = first; path < last; path++) {
     const state = present.subarray(path * width, (path + 1) * width);
     if (Number.isNaN(state[0]!)) continue;
-    onStep!(path, state, rowOf(starts.constants, path, starts.size), t);
+    onStep!(path, state, rowOf(starts.parameters, path, starts.size), t);
   }
 }
 

@@ -24,13 +24,11 @@ export function fittedNoise(fit: Fit, group: GroupFit): FittedNoise {
 }
 
 function scatter(fit: Fit, group: GroupFit, sd: number): Noise {
-  const { spread = "constant" } = fit.options;
-  if (spread === "proportional") return { kind: "log-normal-errors", sd };
-  if (spread === "poisson") return { kind: "poisson" };
-  if (spread === "negative-binomial") {
+  const { distribution = "normal" } = fit.options;
+  if (distribution === "poisson") return { distribution };
+  if (distribution === "negative-binomial") {
     const dispersion = group.estimates.find((estimate) => estimate.name === "dispersion")!.value;
-    return { kind: "negative-binomial", size: 1 / dispersion };
+    return { distribution, size: 1 / dispersion };
   }
-  if (typeof spread === "object" && group.filter === undefined) return { kind: "additive", sd: spread.sd };
-  return { kind: "additive", sd };
+  return { distribution, sd: group.filter === undefined ? (fit.options.sd ?? sd) : sd };
 }

@@ -3,17 +3,18 @@ import { gammaDraw } from "./gamma-draw.js";
 import { poissonDraw } from "./poisson-draw.js";
 
 /**
- * How a value scatters around what the rule gives, by family. `additive`: normal of the given standard deviation, in
- * the state's unit. `lognormal`: a factor exp(sd z - sd^2/2), of mean 1. `log-normal-errors`: a factor exp(sd z), of
- * median 1, as a fit with proportional spread means it. `poisson`: a count of that mean. `negative-binomial`: a count
+ * How a value scatters around what the rule gives, by distribution. `normal`: of the given standard deviation, in the
+ * state's unit. `lognormal`: a factor exp(sd z) of median 1, as in a fit; with `centre: "mean"` a factor
+ * exp(sd z - sd^2/2) of mean 1. `poisson`: a count of that mean. `negative-binomial`: a count
  * of that mean m and variance m + m^2/size. `demographic`: normal of variance `variance` times the level, the sum
  * over individuals.
  */
 export type Noise =
-  | { readonly kind: "additive" | "lognormal" | "log-normal-errors"; readonly sd: number }
-  | { readonly kind: "poisson" }
-  | { readonly kind: "negative-binomial"; readonly size: number }
-  | { readonly kind: "demographic"; readonly variance: number };
+  | { readonly distribution: "normal"; readonly sd: number }
+  | { readonly distribution: "lognormal"; readonly sd: number; readonly centre?: "median" | "mean" }
+  | { readonly distribution: "poisson" }
+  | { readonly distribution: "negative-binomial"; readonly size: number }
+  | { readonly distribution: "demographic"; readonly variance: number };
 
 /** How the normal errors of many values are made at once: as amounts sd z, or as factors exp(centre + sd z). */
 export interface NoiseLot {
@@ -38,13 +39,11 @@ const normalDraw = (kind: NoiseLot["kind"], centre: number, sd: number): NoiseDr
 
 /** The draw of a family. */
 export function noiseDraw(noise: Noise): NoiseDraw {
-  switch (noise.kind) {
-    case "additive":
+  switch (noise.distribution) {
+    case "normal":
       return normalDraw("amounts", 0, noise.sd);
     case "lognormal":
-      return normalDraw("factors", -0.5 * noise.sd * noise.sd, noise.sd);
-    case "log-normal-errors":
-      return normalDraw("factors", 0, noise.sd);
+      return normalDraw("factors", noise.centre === "mean" ? -0.5 * noise.sd * noise.sd : 0, noise.sd);
     case "poisson":
       return poissonDraw;
     case "negative-binomial": {

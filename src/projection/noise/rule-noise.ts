@@ -2,10 +2,10 @@ import type { ProcessNoise, Rule } from "../../rule/index.js";
 import { refuseNoise } from "../refusals.js";
 import type { Noise } from "./noise.js";
 
-/** By state in order: the random change asked for, else the rule's own; a constant's name replaced by its value. */
+/** By state in order: the random change asked for, else the rule's own; a parameter's name replaced by its value. */
 export function ruleNoise(
   rule: Rule,
-  constants: Float64Array,
+  parameters: Float64Array,
   asked: Readonly<Record<string, Noise | ProcessNoise>> | undefined,
 ): readonly (Noise | undefined)[] {
   for (const state of Object.keys(asked ?? {}))
@@ -13,20 +13,20 @@ export function ruleNoise(
       throw refuseNoise(state, `the rule has no such state (it has ${rule.states.join(", ")})`);
   return rule.states.map((state) => {
     const noise = asked?.[state] ?? (asked === undefined ? rule.noise[state] : undefined);
-    return noise && settled(rule, constants, state, noise);
+    return noise && settled(rule, parameters, state, noise);
   });
 }
 
-function settled(rule: Rule, constants: Float64Array, state: string, noise: Noise | ProcessNoise): Noise {
-  if (noise.kind === "poisson") return noise;
-  if (noise.kind === "negative-binomial") return positive(state, noise, noise.size, "size");
-  if (noise.kind === "demographic") return positive(state, noise, noise.variance, "variance");
+function settled(rule: Rule, parameters: Float64Array, state: string, noise: Noise | ProcessNoise): Noise {
+  if (noise.distribution === "poisson") return noise;
+  if (noise.distribution === "negative-binomial") return positive(state, noise, noise.size, "size");
+  if (noise.distribution === "demographic") return positive(state, noise, noise.variance, "variance");
   const { sd } = noise;
-  if (typeof sd === "number") return positive(state, { kind: noise.kind, sd }, sd, "sd");
-  const place = rule.constants.indexOf(sd);
-  if (place < 0) throw refuseNoise(state, `"${sd}" is no constant of the rule`);
-  const value = constants[place]!;
-  return positive(state, { kind: noise.kind, sd: value }, value, "sd");
+  if (typeof sd === "number") return positive(state, { ...noise, sd }, sd, "sd");
+  const place = rule.parameters.indexOf(sd);
+  if (place < 0) throw refuseNoise(state, `"${sd}" is no parameter of the rule`);
+  const value = parameters[place]!;
+  return positive(state, { ...noise, sd: value }, value, "sd");
 }
 
 function positive(state: string, noise: Noise, value: number, what: string): Noise {

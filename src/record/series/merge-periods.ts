@@ -1,6 +1,6 @@
 import type { FindingLog } from "../finding-log.js";
 import type { DuplicateChoice } from "../observation-options.js";
-import type { ReplicateSpread } from "../observations.js";
+import type { ReplicateVariation } from "../observations.js";
 import { rounding } from "../period/period-axis.js";
 import type { PlacedRows } from "../period/placed-rows.js";
 import type { ReadColumn, ReadColumns } from "../read-columns.js";
@@ -23,7 +23,7 @@ export interface MergedRows {
   readonly carry: Carry;
   readonly carrySide: (side: Int8Array, state: ReadColumn) => Int8Array;
   /** Only where replicates are averaged. */
-  readonly spread: ((values: Float64Array) => ReplicateSpread) | undefined;
+  readonly variation: ((values: Float64Array) => ReplicateVariation) | undefined;
 }
 
 /**
@@ -55,7 +55,7 @@ export function mergePeriods(
     carry: (values, how) => Float64Array.from(runs, (run) => combined(run, values, merging(how))),
     carrySide: (side, { values, doubled }) =>
       Int8Array.from(runs, (run) => sideOf(cellsIn(run, values), side, merging(doubled))),
-    spread: areReplicates ? (values) => spreadOf(runs, values) : undefined,
+    variation: areReplicates ? (values) => variationOf(runs, values) : undefined,
   };
 }
 
@@ -72,7 +72,7 @@ function unmerged(rows: Int32Array): MergedRows {
     held: new Int32Array(rows.length).fill(1),
     carry: (values) => pick(values, rows),
     carrySide: (side) => Int8Array.from(rows, (row) => side[row]!),
-    spread: undefined,
+    variation: undefined,
   };
 }
 
@@ -133,7 +133,7 @@ function sideOf(cells: Int32Array, side: Int8Array, how: Merging): number {
   return Math.sign(cells.reduce((sum, row) => sum + side[row]!, 0));
 }
 
-function spreadOf(runs: readonly Int32Array[], values: Float64Array): ReplicateSpread {
+function variationOf(runs: readonly Int32Array[], values: Float64Array): ReplicateVariation {
   const cells = runs.map((run) => cellsIn(run, values));
   return {
     count: Int32Array.from(cells, (run) => run.length),

@@ -1,7 +1,7 @@
 import { type ColumnTable, columnNamed } from "../column-table.js";
 import type { FindingLog } from "../finding-log.js";
 import type { ObservationOptions } from "../observation-options.js";
-import type { ObservedGroup, ReplicateSpread } from "../observations.js";
+import type { ObservedGroup, ReplicateVariation } from "../observations.js";
 import { axisOfRows } from "../period/axis-of-rows.js";
 import type { PlacedRows } from "../period/placed-rows.js";
 import { wholeSteps } from "../period/whole-steps.js";
@@ -35,7 +35,7 @@ export function observedGroup(
   const inputsAt = (places: Int32Array): Named<Float64Array> =>
     byName(columns.inputs, (i) => pick(split.inputs[i]!, places));
   const index = stepsTo(present);
-  const { spread } = merged;
+  const { variation } = merged;
   const group: ObservedGroup = {
     name,
     axis: axisOfRows(periods, { rows, index }),
@@ -56,8 +56,8 @@ export function observedGroup(
       weights: pick(merged.carry(columns.weights, columns.states[0]!.doubled), present),
     }),
     ...censoringOf(columns, merged, present),
-    ...(spread && {
-      replicates: byName(columns.states, (i) => spreadAt(spread(columns.states[i]!.values), present)),
+    ...(variation && {
+      replicates: byName(columns.states, (i) => variationAt(variation(columns.states[i]!.values), present)),
     }),
   };
   const used = [...present, ...inputsOnly].reduce((sum, i) => sum + merged.held[i]!, 0);
@@ -74,7 +74,7 @@ function picked(rows: Int32Array, places: Int32Array): Int32Array {
   return places.map((i) => rows[i]!);
 }
 
-function spreadAt({ count, deviation }: ReplicateSpread, places: Int32Array): ReplicateSpread {
+function variationAt({ count, deviation }: ReplicateVariation, places: Int32Array): ReplicateVariation {
   return { count: picked(count, places), deviation: pick(deviation, places) };
 }
 

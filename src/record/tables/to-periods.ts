@@ -9,7 +9,7 @@ import { type PeriodsOf, type PlacedSeries, placed } from "./placed-series.js";
 import { type Summary, summaryOf } from "./summary-of.js";
 
 /** Which longer period to count by, and how each column is taken over it. */
-export interface RegroupOptions extends PeriodsOf {
+export interface ToPeriodsOptions extends PeriodsOf {
   readonly to: StepLength | CalendarName;
   /** A flow adds up ("sum"); a level at an instant is its "last" one. */
   readonly take: Readonly<Record<string, Summary>>;
@@ -22,7 +22,7 @@ export interface RegroupOptions extends PeriodsOf {
  *
  * @throws {ModelError} `missing-column` | `not-a-number` | `option-wrong`, and those of the period column.
  */
-export function toPeriods(record: ColumnTable, options: RegroupOptions): ColumnTable {
+export function toPeriods(record: ColumnTable, options: ToPeriodsOptions): ColumnTable {
   const { table, periods, by, series } = placed(record, options);
   const longer = placedRows(table, options.period, options.to);
   const { of } = periods.calendar.step;

@@ -11,7 +11,7 @@ const logistic: CatalogueEntry = {
   quantities: { N: level, r: rate, K: capacity },
   holds: ["r > 0", "r <= 3", "K > 0", "N0 >= 0 and N0 <= K*(1 + 1/r)"],
   bounds: { r: positive, K: positive, N: positive },
-  guesses: { r: 0.5 },
+  start: { r: 0.5 },
   equilibria: [
     { at: { N: "0" }, multiplier: "1 + r" },
     { at: { N: "K" }, multiplier: "1 - r" },
@@ -32,7 +32,7 @@ const bevertonHolt: CatalogueEntry = {
   quantities: { N: level, R: growth, K: capacity },
   holds: ["R > 1", "K > 0", "N0 >= 0"],
   bounds: { R: aboveOne, K: positive, N: positive },
-  guesses: { R: 1.5 },
+  start: { R: 1.5 },
   equilibria: [
     { at: { N: "0" }, multiplier: "R" },
     { at: { N: "K" }, multiplier: "1/R" },
@@ -49,7 +49,7 @@ const ricker: CatalogueEntry = {
   quantities: { N: level, r: rate, K: capacity },
   holds: ["r > 0", "K > 0", "N0 >= 0"],
   bounds: { r: positive, K: positive, N: positive },
-  guesses: { r: 0.5 },
+  start: { r: 0.5 },
   equilibria: [
     { at: { N: "0" }, multiplier: "exp(r)" },
     { at: { N: "K" }, multiplier: "1 - r" },
@@ -66,14 +66,14 @@ const hassell: CatalogueEntry = {
   quantities: { N: level, lam: growth, a: perLevel("crowding"), b: pure("how sharply crowding acts") },
   holds: ["lam > 1", "a > 0", "b > 0", "N0 >= 0"],
   bounds: { lam: aboveOne, a: positive, b: positive, N: positive },
-  guesses: { lam: 1.5, b: 1 },
+  start: { lam: 1.5, b: 1 },
   equilibria: [
     { at: { N: "0" }, multiplier: "lam" },
     { at: { N: "(lam^(1/b) - 1)/a" }, multiplier: "1 - b*(1 - lam^(-1/b))" },
   ],
   closedForms: [{ when: "b == 1", values: { N: "lam^t*N0/(1 + a*N0*(lam^t - 1)/(lam - 1))" } }],
   remarks:
-    "One-sided for b up to 1, where b = 1 is Beverton-Holt. The three constants are strongly correlated.",
+    "One-sided for b up to 1, where b = 1 is Beverton-Holt. The three parameters are strongly correlated.",
 };
 
 const maynardSmithSlatkin: CatalogueEntry = {
@@ -84,7 +84,7 @@ const maynardSmithSlatkin: CatalogueEntry = {
   quantities: { N: level, lam: growth, a: perLevel("crowding"), b: pure("how sharply crowding acts") },
   holds: ["lam > 1", "a > 0", "b > 0", "N0 >= 0"],
   bounds: { lam: aboveOne, a: positive, b: positive, N: positive },
-  guesses: { lam: 1.5, b: 1 },
+  start: { lam: 1.5, b: 1 },
   equilibria: [
     { at: { N: "0" }, multiplier: "lam" },
     { at: { N: "(lam - 1)^(1/b)/a" }, multiplier: "1 - b*(1 - 1/lam)" },
@@ -103,7 +103,7 @@ const thetaLogistic: CatalogueEntry = {
   quantities: { N: level, r: rate, K: capacity, theta: pure("how late crowding sets in") },
   holds: ["r > 0", "K > 0", "theta > 0", "N0 >= 0"],
   bounds: { r: positive, K: positive, theta: positive, N: positive },
-  guesses: { r: 0.5, theta: 1 },
+  start: { r: 0.5, theta: 1 },
   equilibria: [
     { at: { N: "0" }, multiplier: "exp(r)" },
     { at: { N: "K" }, multiplier: "1 - r*theta" },
@@ -120,7 +120,7 @@ const gompertz: CatalogueEntry = {
   quantities: { N: level, a: pure("intercept on the log scale"), b: pure("slope on the log scale") },
   holds: ["abs(b) < 1", "N0 > 0"],
   bounds: { b: [-1, 1], N: positive },
-  guesses: { b: 0.8 },
+  start: { b: 0.8 },
   equilibria: [{ at: { N: "exp(a/(1 - b))" }, multiplier: "b" }],
   closedForms: [{ values: { N: "exp(b^t*log(N0) + a*(1 - b^t)/(1 - b))" } }],
   remarks:
@@ -136,7 +136,7 @@ const allee: CatalogueEntry = {
   quantities: { N: level, r: rate, K: capacity, A: inLevels("level below which it collapses") },
   holds: ["r > 0", "A > 0", "A < K", "N0 >= 0"],
   bounds: { r: positive, K: positive, A: positive, N: positive },
-  guesses: { r: 0.3 },
+  start: { r: 0.3 },
   equilibria: [
     { at: { N: "0" }, multiplier: "exp(-r)" },
     { at: { N: "A" }, multiplier: "1 + r*(1 - A/K)" },

@@ -74,7 +74,7 @@ const chemostat: CatalogueEntry = {
   quantities: { N: level, d: pure("share replaced in a period"), R: growth, K: capacity },
   holds: ["R > 1", "K > 0", "d >= 0 and d < 1", "N0 >= 0"],
   bounds: { R: aboveOne, K: positive, d: fraction, N: positive },
-  guesses: { R: 1.5, d: 0.1 },
+  start: { R: 1.5, d: 0.1 },
   equilibria: [
     { at: { N: "0" }, multiplier: "(1 - d)*R" },
     { at: { N: "K*((1 - d)*R - 1)/(R - 1)" }, multiplier: "1/((1 - d)*R)", when: "(1 - d)*R > 1" },
@@ -102,7 +102,7 @@ const transfer: CatalogueEntry = {
   },
   holds: ["G > 1", "D >= 1", "K > 0", "N0 >= 0"],
   bounds: { G: aboveOne, D: aboveOne, K: positive, N: positive },
-  guesses: { G: 20, D: 10 },
+  start: { G: 20, D: 10 },
   equilibria: [
     { at: { N: "0" }, multiplier: "G/D" },
     { at: { N: "K*(G - D)/(G - 1)" }, multiplier: "D/G", when: "G > D" },

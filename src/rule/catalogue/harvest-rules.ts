@@ -16,7 +16,7 @@ const pellaTomlinson: CatalogueEntry = {
   mayBeInput: caught,
   holds: ["r > 0", "K > 0", "m > 0 and m != 1", "C >= 0", "B0 >= 0"],
   bounds: { ...bounds, m: positive },
-  guesses: { r: 0.4, m: 2 },
+  start: { r: 0.4, m: 2 },
   equilibria: [{ at: { B: "K" }, multiplier: "1 - r", when: "C == 0" }],
   closedForms: [],
   remarks: "Largest sustainable catch at B = K*m^(-1/(m - 1)).",
@@ -31,7 +31,7 @@ const schaefer: CatalogueEntry = {
   mayBeInput: caught,
   holds: ["r > 0", "K > 0", "C >= 0", "B0 >= 0"],
   bounds,
-  guesses: { r: 0.4 },
+  start: { r: 0.4 },
   equilibria: [
     {
       at: { B: "K/2*(1 - sqrt(1 - 4*C/(r*K)))" },
@@ -58,7 +58,7 @@ const fox: CatalogueEntry = {
   mayBeInput: caught,
   holds: ["r > 0", "K > 0", "C >= 0", "B0 > 0"],
   bounds,
-  guesses: { r: 0.4 },
+  start: { r: 0.4 },
   equilibria: [{ at: { B: "K" }, multiplier: "1 - r", when: "C == 0" }],
   closedForms: [],
   remarks: "Largest sustainable catch r*K/e, taken at K/e.",

@@ -23,7 +23,7 @@ const geometric: CatalogueEntry = {
   quantities: { x: level, R: growth },
   holds: ["R > 0"],
   bounds: { R: positive },
-  guesses: { R: 1.1 },
+  start: { R: 1.1 },
   equilibria: [{ at: { x: "0" }, multiplier: "R" }],
   closedForms: [{ values: { x: "x0*R^t" } }],
   remarks: "Zero is stable if and only if R < 1. It doubles every log(2)/log(R) periods.",
@@ -40,7 +40,7 @@ const affine: CatalogueEntry = {
     b: inLevels("amount added a period"),
   },
   holds: [],
-  guesses: { a: 1 },
+  start: { a: 1 },
   equilibria: [{ at: { x: "b/(1 - a)" }, multiplier: "a", when: "a != 1" }],
   closedForms: [
     { when: "a != 1", values: { x: "a^t*x0 + b*(1 - a^t)/(1 - a)" } },
@@ -62,7 +62,7 @@ const dosing: CatalogueEntry = {
   },
   holds: ["rho > 0 and rho < 1"],
   bounds: { rho: [0, 1], D: positive },
-  guesses: { rho: 0.5 },
+  start: { rho: 0.5 },
   equilibria: [{ at: { M: "D/(1 - rho)" }, multiplier: "rho" }],
   closedForms: [{ values: { M: "rho^t*M0 + D*(1 - rho^t)/(1 - rho)" } }],
   remarks:

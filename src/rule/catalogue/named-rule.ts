@@ -1,23 +1,23 @@
-/** A constant, state or input of a named rule: what it is, and its unit in terms of "level" and "period". */
+/** A parameter, state or input of a named rule: what it is, and its unit in terms of "level" and "period". */
 export interface NamedQuantity {
   readonly meaning: string;
   /** "level" stands for the unit of the state; "" is a pure number. */
   readonly unit: string;
 }
 
-/** Values that a named rule leaves as they are, as formulas of its constants. */
+/** Values that a named rule leaves as they are, as formulas of its parameters. */
 export interface NamedEquilibrium {
   /** By state. */
   readonly at: Readonly<Record<string, string>>;
   /** Slope of the step there; absent for systems and lags. */
   readonly multiplier?: string;
-  /** Condition on the constants under which it exists; absent = always. */
+  /** Condition on the parameters under which it exists; absent = always. */
   readonly when?: string;
 }
 
-/** The value after t steps, as formulas of the constants, the first values (N0 of N) and t. */
+/** The value after t steps, as formulas of the parameters, the first values (N0 of N) and t. */
 export interface NamedClosedForm {
-  /** Condition on the constants under which it holds; absent = always. */
+  /** Condition on the parameters under which it holds; absent = always. */
   readonly when?: string;
   /** By state. */
   readonly values: Readonly<Record<string, string>>;
@@ -32,7 +32,7 @@ export interface NamedRule {
   readonly title: string;
   readonly source: string;
   readonly quantities: Readonly<Record<string, NamedQuantity>>;
-  /** Constants that a record often holds as a column of its own, as a catch: they become inputs when said so. */
+  /** Parameters that a record often holds as a column of its own, as a catch: they become inputs when said so. */
   readonly mayBeInput?: readonly string[];
   /** Conditions under which the rule means what it says; outside them results are refused. */
   readonly holds: readonly string[];
@@ -47,5 +47,5 @@ export interface CatalogueEntry extends NamedRule {
   readonly text: string;
   readonly inputs?: readonly string[];
   readonly bounds?: Readonly<Record<string, readonly [number, number]>>;
-  readonly guesses?: Readonly<Record<string, number>>;
+  readonly start?: Readonly<Record<string, number>>;
 }

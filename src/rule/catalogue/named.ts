@@ -4,7 +4,7 @@ import type { Rule } from "../rule.js";
 import type { CatalogueEntry } from "./named-rule.js";
 
 /** What may be said of a rule from the catalogue; its text is given. */
-export type NamedRuleOptions = Omit<RecurrenceOptions, "constants">;
+export type NamedRuleOptions = Omit<RecurrenceOptions, "parameters">;
 
 /** Units of all names, from that of the first state: "1/level" becomes "1/(cells/mL)", written out. */
 function unitsFrom(entry: CatalogueEntry, given: Readonly<Record<string, string>>): Record<string, string> {
@@ -26,7 +26,7 @@ const freeze = <T>(value: T): T => {
 
 /** Makes the rule of a catalogue entry; what is given prevails over what the entry says. */
 export function named(entry: CatalogueEntry, options: NamedRuleOptions = {}): Rule {
-  const { text, inputs = [], bounds = {}, guesses = {}, ...about } = entry;
+  const { text, inputs = [], bounds = {}, start = {}, ...about } = entry;
   const inputsGiven = [...new Set([...inputs, ...(options.inputs ?? [])])];
   const free = <T>(record: Readonly<Record<string, T>>): Record<string, T> =>
     Object.fromEntries(Object.entries(record).filter(([name]) => !inputsGiven.includes(name)));
@@ -35,7 +35,7 @@ export function named(entry: CatalogueEntry, options: NamedRuleOptions = {}): Ru
     inputs: inputsGiven,
     units: unitsFrom(entry, options.units ?? {}),
     bounds: { ...free(bounds), ...options.bounds },
-    guesses: { ...free(guesses), ...options.guesses },
+    start: { ...free(start), ...options.start },
   };
   return makeRule(text, full, freeze(about));
 }

@@ -23,7 +23,7 @@ const delayed = (lag: number): CatalogueEntry => ({
   quantities: { N: level, r: rate, K: capacity },
   holds: ["r > 0", "K > 0", "N0 >= 0"],
   bounds: { r: positive, K: positive, N: positive },
-  guesses: { r: 0.3 },
+  start: { r: 0.3 },
   equilibria: [{ at: { N: "0" } }, { at: { N: "K" }, ...(lag === 0 ? { multiplier: "1 - r" } : {}) }],
   closedForms: [],
   remarks: `Stable if and only if r lies between 0 and 2*cos(pi*T/(2*T + 1)) = ${(2 * Math.cos((Math.PI * lag) / (2 * lag + 1))).toPrecision(6)}.`,
@@ -43,7 +43,7 @@ const nicholsonBailey: CatalogueEntry = {
   quantities: { H: host, P: parasitoid, lam: growth, a: search, c: yieldOf },
   holds: ["lam > 1", "a > 0", "c > 0", "H0 >= 0", "P0 >= 0"],
   bounds: { lam: [1, Number.POSITIVE_INFINITY], a: positive, c: positive, H: positive, P: positive },
-  guesses: { lam: 2, c: 1 },
+  start: { lam: 2, c: 1 },
   equilibria: [{ at: { H: "lam*log(lam)/((lam - 1)*a*c)", P: "log(lam)/a" } }],
   closedForms: [],
   remarks: "Always unstable: swings grow until one of the two is gone.",
@@ -71,7 +71,7 @@ const clumped: CatalogueEntry = {
     H: positive,
     P: positive,
   },
-  guesses: { lam: 2, c: 1, k: 0.5 },
+  start: { lam: 2, c: 1, k: 0.5 },
   equilibria: [
     {
       at: {
@@ -111,7 +111,7 @@ const competition: CatalogueEntry = {
     a12: positive,
     a21: positive,
   },
-  guesses: { R1: 1.5, R2: 1.5, a12: 0.5, a21: 0.5 },
+  start: { R1: 1.5, R2: 1.5, a12: 0.5, a21: 0.5 },
   equilibria: [
     { at: { N1: "0", N2: "0" } },
     { at: { N1: "M1*(R1 - 1)", N2: "0" } },
@@ -151,7 +151,7 @@ function adults(lag: number, recruits: "rising" | "humped"): CatalogueEntry {
     },
     holds: ["s >= 0 and s < 1", "a > 0", "b > 0", "B0 >= 0"],
     bounds: { s: fraction, a: positive, b: positive, B: positive },
-    guesses: { s: 0.6, a: 1 },
+    start: { s: 0.6, a: 1 },
     equilibria: [{ at: { B: "0" } }, { at: { B: rest }, when: "a > 1 - s" }],
     closedForms: [],
     remarks:

@@ -54,24 +54,24 @@ function checkInput(names: Names, at: Name): void {
   throw refuse("future-value", names.text, at, wrong, `An input may be read up to ${at.name}[t+1].`);
 }
 
-function checkConstant(names: Names, at: Name): void {
+function checkParameter(names: Names, at: Name): void {
   if (reservedWords.has(at.name)) {
     const wrong = `"${at.name}" is not free to be used as a name.`;
     throw refuse("reserved-name", names.text, at, wrong, "Choose another name for it.");
   }
   if (names.declared !== undefined && !names.declared.has(at.name)) throw refuseUnknown(names, at, at.name);
   if (at.offset !== 0) {
-    const wrong = `"${at.name}" is a constant and has no value of its own in other periods.`;
+    const wrong = `"${at.name}" is a parameter and has no value of its own in other periods.`;
     const remedy = `If it is recorded by period, declare it: { inputs: ["${at.name}"] }.`;
-    throw refuse("constant-of-another-period", names.text, at, wrong, remedy);
+    throw refuse("parameter-of-another-period", names.text, at, wrong, remedy);
   }
   if (names.declared === undefined && (at.name === "e" || at.name === "pi")) {
     const value = at.name === "e" ? "exp(1)" : "3.141592653589793";
     const wrong = `"${at.name}" is not taken for a number of mathematics.`;
-    const remedy = `Write ${value}, or declare it as a constant of your own: { constants: ["${at.name}", ...] }.`;
+    const remedy = `Write ${value}, or declare it as a parameter of your own: { parameters: ["${at.name}", ...] }.`;
     throw refuse("undeclared-number", names.text, at, wrong, remedy);
   }
-  if (!names.constants.has(at.name)) names.constants.set(at.name, at);
+  if (!names.parameters.has(at.name)) names.parameters.set(at.name, at);
 }
 
 /** Checks one name on the right of line number `line` and notes how it is used. */
@@ -84,5 +84,5 @@ export function checkName(names: Names, at: Name, line: number): void {
   if (names.states.has(at.name)) checkState(names, at);
   else if (names.quantityLines.has(at.name)) checkQuantity(names, at, line);
   else if (names.inputs.has(at.name)) checkInput(names, at);
-  else checkConstant(names, at);
+  else checkParameter(names, at);
 }

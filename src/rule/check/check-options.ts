@@ -23,7 +23,7 @@ function refuseValue(option: string, name: string, wanted: string, given: unknow
 
 type Fits = (value: never, name: string) => boolean;
 interface OptionCheck {
-  readonly option: "units" | "bounds" | "guesses" | "fixed" | "initial" | "noise";
+  readonly option: "units" | "bounds" | "start" | "fixed" | "initial" | "noise";
   readonly what: string;
   readonly names: readonly string[];
   readonly wanted: (name: string) => string;
@@ -33,27 +33,27 @@ interface OptionCheck {
 const isNumber = (value: unknown): boolean => typeof value === "number" && Number.isFinite(value);
 
 function checks(rule: CheckedRule): readonly OptionCheck[] {
-  const { states, constants, quantities, inputs } = rule;
+  const { states, parameters, quantities, inputs } = rule;
   const pastValues = (name: string): number => rule.lags.get(name) ?? 0;
   const number = (): string => "a finite number";
   return [
     {
       option: "units",
       what: "name",
-      names: [...states, ...quantities, ...inputs, ...constants, "t"],
+      names: [...states, ...quantities, ...inputs, ...parameters, "t"],
       wanted: () => 'a text such as "cells/mL"',
       fits: (value: unknown) => typeof value === "string",
     },
     {
       option: "bounds",
-      what: "state or constant",
-      names: [...states, ...constants],
+      what: "state or parameter",
+      names: [...states, ...parameters],
       wanted: () => "two numbers, lowest first, as in [0, Infinity]",
       fits: (value: readonly [number, number]) =>
         Array.isArray(value) && value.length === 2 && value[0] < value[1],
     },
-    { option: "guesses", what: "constant", names: constants, wanted: number, fits: isNumber },
-    { option: "fixed", what: "constant", names: constants, wanted: number, fits: isNumber },
+    { option: "start", what: "parameter", names: parameters, wanted: number, fits: isNumber },
+    { option: "fixed", what: "parameter", names: parameters, wanted: number, fits: isNumber },
     {
       option: "initial",
       what: "state",
@@ -72,10 +72,11 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
       option: "noise",
       what: "state",
       names: states,
-      wanted: () => '{ kind: "additive" | "lognormal", sd: a number or the name of a constant of the rule }',
-      fits: (value: { kind?: unknown; sd?: unknown } | null) =>
-        (value?.kind === "additive" || value?.kind === "lognormal") &&
-        ((typeof value.sd === "string" && constants.includes(value.sd)) ||
+      wanted: () =>
+        '{ distribution: "normal" | "lognormal", sd: a number or the name of a parameter of the rule }',
+      fits: (value: { distribution?: unknown; sd?: unknown } | null) =>
+        (value?.distribution === "normal" || value?.distribution === "lognormal") &&
+        ((typeof value.sd === "string" && parameters.includes(value.sd)) ||
           (isNumber(value.sd) && (value.sd as number) >= 0)),
     },
   ];

@@ -6,9 +6,9 @@ import type { CheckedRule, Declared } from "./checked-rule.js";
 import { appearance } from "./look-alike-letters.js";
 import { type Names, namesOf } from "./names.js";
 
-/** Pairs of names, the second a constant that was not declared and came later. */
+/** Pairs of names, the second a parameter that was not declared and came later. */
 function pairsWithFree(names: Names): readonly (readonly [string, string])[] {
-  const free = names.declared === undefined ? [...names.constants.keys()] : [];
+  const free = names.declared === undefined ? [...names.parameters.keys()] : [];
   const set = [...names.states, ...names.quantityLines.keys(), ...names.inputs];
   return free.flatMap((name, i) => [...set, ...free.slice(0, i)].map((other) => [other, name] as const));
 }
@@ -23,15 +23,15 @@ function lookAlikeNames(names: Names): readonly Warning[] {
     const how = sameLook
       ? "look the same and are written with letters of two alphabets"
       : "differ by one letter";
-    const message = `"${other}" and "${name}" ${how}; they are read as two names. If one is a slip, correct it; declare { constants: [...] } to have every other name refused.`;
+    const message = `"${other}" and "${name}" ${how}; they are read as two names. If one is a slip, correct it; declare { parameters: [...] } to have every other name refused.`;
     return [{ code: "names-look-alike", message }];
   });
 }
 
 function unused(names: Names): readonly Warning[] {
-  const constants = [...(names.declared ?? [])].filter((name) => !names.constants.has(name));
+  const parameters = [...(names.declared ?? [])].filter((name) => !names.parameters.has(name));
   const inputs = [...names.inputs].filter((name) => !names.usedInputs.has(name));
-  return [...constants, ...inputs].map((name) => ({
+  return [...parameters, ...inputs].map((name) => ({
     code: "declared-but-unused",
     message: `"${name}" is declared and stands nowhere in the rule. Take it out, or look for a slip in the text.`,
   }));
@@ -54,7 +54,7 @@ export function checkRule(text: string, statements: readonly Statement[], declar
     states: [...names.states],
     quantities: [...names.quantityLines.keys()],
     inputs: declared.inputs.filter((name) => names.usedInputs.has(name)),
-    constants: [...names.constants.keys()],
+    parameters: [...names.parameters.keys()],
     lags: names.lags,
     findings: [...lookAlikeNames(names), ...unused(names)],
   };

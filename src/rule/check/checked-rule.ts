@@ -8,7 +8,7 @@ export interface CheckedRule {
   readonly states: readonly string[];
   readonly quantities: readonly string[];
   readonly inputs: readonly string[];
-  readonly constants: readonly string[];
+  readonly parameters: readonly string[];
   /** By state: the largest lag read; absent where only the present value is. */
   readonly lags: ReadonlyMap<string, number>;
   readonly findings: readonly Warning[];
@@ -16,7 +16,7 @@ export interface CheckedRule {
 
 /** What the analyst declared beside the text. */
 export interface Declared {
-  /** Absent: every free name is a constant. */
-  readonly constants?: readonly string[] | undefined;
+  /** Absent: every free name is a parameter. */
+  readonly parameters?: readonly string[] | undefined;
   readonly inputs: readonly string[];
 }

@@ -10,12 +10,12 @@ export interface Names {
   readonly text: string;
   readonly states: ReadonlySet<string>;
   readonly inputs: ReadonlySet<string>;
-  /** Declared constants, or undefined when every free name is one. */
+  /** Declared parameters, or undefined when every free name is one. */
   readonly declared: ReadonlySet<string> | undefined;
   /** By quantity: the number of the line that sets it. */
   readonly quantityLines: ReadonlyMap<string, number>;
   /** In order of first appearance. */
-  readonly constants: Map<string, Span>;
+  readonly parameters: Map<string, Span>;
   readonly usedInputs: Set<string>;
   /** Largest lag read, by state. */
   readonly lags: Map<string, number>;
@@ -33,7 +33,7 @@ function refuseSetInput(text: string, place: Span, name: string, kind: string): 
     text,
     place,
     wrong,
-    `Take it out of ${kind === "an input" ? "inputs" : "constants"}.`,
+    `Take it out of ${kind === "an input" ? "inputs" : "parameters"}.`,
   );
 }
 
@@ -49,7 +49,7 @@ const refuseReserved = (name: string): Error =>
 const refuseTwoRoles = (name: string): Error =>
   new ModelError(
     "two-roles",
-    `"${name}" is declared both as a constant and as an input. Keep one of the two.`,
+    `"${name}" is declared both as a parameter and as an input. Keep one of the two.`,
     {
       name,
     },
@@ -60,14 +60,14 @@ export function namesOf(text: string, statements: readonly Statement[], declared
   const states = new Set<string>();
   const quantityLines = new Map<string, number>();
   const inputs = new Set(declared.inputs);
-  for (const name of [...inputs, ...(declared.constants ?? [])]) {
+  for (const name of [...inputs, ...(declared.parameters ?? [])]) {
     if (reservedWords.has(name)) throw refuseReserved(name);
-    if (inputs.has(name) && declared.constants?.includes(name)) throw refuseTwoRoles(name);
+    if (inputs.has(name) && declared.parameters?.includes(name)) throw refuseTwoRoles(name);
   }
   statements.forEach(({ kind, name, nameAt }, line) => {
     if (states.has(name) || quantityLines.has(name)) throw refuseSecond(text, nameAt, name);
     if (inputs.has(name)) throw refuseSetInput(text, nameAt, name, "an input");
-    if (declared.constants?.includes(name)) throw refuseSetInput(text, nameAt, name, "a constant");
+    if (declared.parameters?.includes(name)) throw refuseSetInput(text, nameAt, name, "a parameter");
     if (kind === "quantity") quantityLines.set(name, line);
     else states.add(name);
   });
@@ -75,9 +75,9 @@ export function namesOf(text: string, statements: readonly Statement[], declared
     text,
     states,
     inputs,
-    declared: declared.constants && new Set(declared.constants),
+    declared: declared.parameters && new Set(declared.parameters),
     quantityLines,
-    constants: new Map(),
+    parameters: new Map(),
     usedInputs: new Set(),
     lags: new Map(),
   };
@@ -86,7 +86,7 @@ export function namesOf(text: string, statements: readonly Statement[], declared
 /** The refusal of a name that is none of the known ones. */
 export function refuseUnknown(names: Names, place: Span, name: string): Error {
   const others = [...names.states, ...names.quantityLines.keys(), ...names.inputs];
-  const constants = [...(names.declared ?? [])];
+  const parameters = [...(names.declared ?? [])];
   const functions = ruleFunctions.map((one) => one.name);
-  return unknownName(names.text, place, name, { constants, others, functions });
+  return unknownName(names.text, place, name, { parameters, others, functions });
 }

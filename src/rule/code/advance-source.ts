@@ -3,7 +3,7 @@ import type { RuleGraph } from "../graph/rule-graph.js";
 import { type EmittedProgram, emitProgram } from "./emit-program.js";
 import { lines, readArguments } from "./source-parts.js";
 
-const sharedByPaths: ReadonlySet<LeafRole> = new Set(["constant", "input", "period"]);
+const sharedByPaths: ReadonlySet<LeafRole> = new Set(["parameter", "input", "period"]);
 const ofTheirOwn: ReadonlySet<LeafRole> = new Set(["input", "period"]);
 
 /** Paths that an unlimited loop takes at once: their steps overlap in the processor, and one look serves them all. */
@@ -45,17 +45,17 @@ function unlimitedLoop(rule: RuleGraph, program: EmittedProgram): readonly strin
   ];
 }
 
-/** Body of `advance(present, first, last, constants, inputs, t, limits)`: whatever paths share stands before the loops. */
+/** Body of `advance(present, first, last, parameters, inputs, t, limits)`: whatever paths share stands before the loops. */
 export function advanceSource(rule: RuleGraph, shared: boolean): string {
   const program = emitProgram(rule.next, shared ? sharedByPaths : ofTheirOwn);
-  const { states, constants, observed } = rule;
-  const own = lines(constants, (i) => `const c${i} = constants[path * ${constants} + ${i}];`);
+  const { states, parameters, observed } = rule;
+  const own = lines(parameters, (i) => `const c${i} = parameters[path * ${parameters} + ${i}];`);
   const within = Array.from({ length: observed }, (_, i) => `n${i} >= low${i} && n${i} <= high${i}`).join(
     " && ",
   );
   return [
     lines(observed, (i) => `const low${i} = limits[${2 * i}];\nconst high${i} = limits[${2 * i + 1}];`),
-    shared ? readArguments(rule) : readArguments({ ...rule, constants: 0 }),
+    shared ? readArguments(rule) : readArguments({ ...rule, parameters: 0 }),
     ...program.before,
     "let path = first;",
     ...(shared && states === 1 ? unlimitedLoop(rule, program) : []),

@@ -19,7 +19,7 @@ interface Facts {
 }
 
 /** What stays the same from turn to turn of a loop over periods. */
-const constantsOnly: ReadonlySet<LeafRole> = new Set(["constant"]);
+const parametersOnly: ReadonlySet<LeafRole> = new Set(["parameter"]);
 
 /** Counts uses, finds which nodes change from turn to turn, and orders arguments before what uses them. */
 function survey(roots: readonly Node[], fixed: ReadonlySet<LeafRole>): Facts {
@@ -48,7 +48,7 @@ function numberSource(value: number): string {
 /** Names come from roles and slots alone, never from the rule's text. */
 function leafSource(node: Extract<Node, { kind: "leaf" }>): string {
   if (node.role === "state") return `s${node.slot}`;
-  if (node.role === "constant") return `c${node.slot}`;
+  if (node.role === "parameter") return `c${node.slot}`;
   if (node.role === "period") return "t";
   return node.offset === 0 ? `u${node.slot}[t]` : `u${node.slot}[t + ${node.offset}]`.replace("+ -", "- ");
 }
@@ -65,7 +65,7 @@ function needsVariable(node: Node, facts: Facts, depth: number): boolean {
  */
 export function emitProgram(
   roots: readonly Node[],
-  fixed: ReadonlySet<LeafRole> = constantsOnly,
+  fixed: ReadonlySet<LeafRole> = parametersOnly,
 ): EmittedProgram {
   const facts = survey(roots, fixed);
   const before: string[] = [];

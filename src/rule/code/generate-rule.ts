@@ -42,23 +42,26 @@ function late<T>(make: () => T): () => T {
 /** The rule as generated functions, each made when first read. */
 export function generateRule(rule: RuleGraph): CompiledRule {
   const step = late(() =>
-    makeFunction<CompiledRule["step"]>("state, constants, inputs, t, next", stepSource(rule)),
+    makeFunction<CompiledRule["step"]>("state, parameters, inputs, t, next", stepSource(rule)),
   );
   const path = late(() =>
-    makeFunction<CompiledRule["path"]>("initial, constants, inputs, from, periods, values", pathSource(rule)),
+    makeFunction<CompiledRule["path"]>(
+      "initial, parameters, inputs, from, periods, values",
+      pathSource(rule),
+    ),
   );
   const pathWithSensitivities = late(() =>
-    rule.states * (rule.states + rule.constants) > widestTable
+    rule.states * (rule.states + rule.parameters) > widestTable
       ? interpretGraph(rule).pathWithSensitivities
       : makeFunction<CompiledRule["pathWithSensitivities"]>(
-          "initial, constants, inputs, from, periods, values, sensitivities",
+          "initial, parameters, inputs, from, periods, values, sensitivities",
           sensitivitySource(rule),
         ),
   );
   const [plainSums, logSums] = [false, true].map((logarithmic) =>
     late(() =>
       makeFunction<PathSums>(
-        "initial, constants, inputs, from, periods, observed, weights, sums",
+        "initial, parameters, inputs, from, periods, observed, weights, sums",
         sumsSource(rule, logarithmic),
       ),
     ),
@@ -66,7 +69,7 @@ export function generateRule(rule: RuleGraph): CompiledRule {
   const [advance, advanceEach] = [true, false].map((shared) =>
     late(() =>
       makeFunction<Advance>(
-        "present, first, last, constants, inputs, t, limits",
+        "present, first, last, parameters, inputs, t, limits",
         advanceSource(rule, shared),
       ),
     ),
@@ -74,12 +77,12 @@ export function generateRule(rule: RuleGraph): CompiledRule {
   const [plainSteps, logSteps] = [false, true].map((logarithmic) =>
     late(() =>
       makeFunction<StepSums>(
-        "constants, inputs, periods, from, observed, weights, sums",
+        "parameters, inputs, periods, from, observed, weights, sums",
         stepSumsSource(rule, logarithmic),
       ),
     ),
   ) as [() => StepSums, () => StepSums];
-  const summed = rule.states + rule.constants <= mostSummed;
+  const summed = rule.states + rule.parameters <= mostSummed;
   return {
     stepSums: summed ? (logarithmic) => (logarithmic ? logSteps() : plainSteps()) : undefined,
     pathSums: summed ? (logarithmic) => (logarithmic ? logSums() : plainSums()) : undefined,

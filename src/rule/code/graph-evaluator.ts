@@ -2,17 +2,17 @@ import { graphOrder } from "../graph/graph-order.js";
 import type { Node } from "../graph/node.js";
 import { operations } from "../graph/operations.js";
 
-/** Where a step stands: present values, constants, input columns and the period index. */
+/** Where a step stands: present values, parameters, input columns and the period index. */
 export type Place = Readonly<{
   state: Float64Array;
-  constants: Float64Array;
+  parameters: Float64Array;
   inputs: readonly Float64Array[];
   t: number;
 }>;
 
 function leafValue(node: Extract<Node, { kind: "leaf" }>, place: Place): number {
   if (node.role === "state") return place.state[node.slot]!;
-  if (node.role === "constant") return place.constants[node.slot]!;
+  if (node.role === "parameter") return place.parameters[node.slot]!;
   if (node.role === "period") return place.t;
   return place.inputs[node.slot]![place.t + node.offset] ?? Number.NaN;
 }

@@ -5,9 +5,9 @@ import { graphEvaluator, type ReadNode } from "./graph-evaluator.js";
 
 /** Sensitivities [states, unknowns] after a step, from those before it and the slopes of the step. */
 function nextSensitivities(rule: RuleGraph, read: ReadNode, before: Float64Array, after: Float64Array): void {
-  const { byState, byConstant } = stepDerivatives(rule);
+  const { byState, byParameter } = stepDerivatives(rule);
   const zero = rule.graph.number(0);
-  const unknowns = rule.constants + rule.states;
+  const unknowns = rule.parameters + rule.states;
   for (let cell = 0; cell < after.length; cell++) {
     const slot = Math.floor(cell / unknowns);
     const unknown = cell % unknowns;
@@ -15,7 +15,7 @@ function nextSensitivities(rule: RuleGraph, read: ReadNode, before: Float64Array
     byState[slot]!.forEach((slope, k) => {
       if (slope !== zero) sum += read(slope) * before[k * unknowns + unknown]!;
     });
-    const own = byConstant[slot]![unknown];
+    const own = byParameter[slot]![unknown];
     after[cell] = own === undefined ? sum : sum + read(own);
   }
 }
@@ -24,17 +24,17 @@ function nextSensitivities(rule: RuleGraph, read: ReadNode, before: Float64Array
 export function interpretGraph(rule: RuleGraph): CompiledRule {
   const width = rule.states;
   const evaluateStep = graphEvaluator(rule.next);
-  const step: CompiledRule["step"] = (state, constants, inputs, t, next) => {
-    const read = evaluateStep({ state, constants, inputs, t });
+  const step: CompiledRule["step"] = (state, parameters, inputs, t, next) => {
+    const read = evaluateStep({ state, parameters, inputs, t });
     rule.next.forEach((node, slot) => {
       next[slot] = read(node);
     });
   };
-  const path: CompiledRule["path"] = (initial, constants, inputs, from, periods, values) => {
+  const path: CompiledRule["path"] = (initial, parameters, inputs, from, periods, values) => {
     const state = initial.slice(0, width);
     values.set(state);
     for (let i = 1; i <= periods; i++) {
-      step(state, constants, inputs, from + i - 1, state);
+      step(state, parameters, inputs, from + i - 1, state);
       values.set(state, i * width);
     }
   };
@@ -54,11 +54,11 @@ function interpretAdvance(rule: RuleGraph, step: CompiledRule["step"], shared: b
     state
       .subarray(0, rule.observed)
       .some((value, i) => !(value >= limits[2 * i]! && value <= limits[2 * i + 1]!));
-  return (present, first, last, constants, inputs, t, limits) => {
+  return (present, first, last, parameters, inputs, t, limits) => {
     for (let path = first; path < last; path++) {
       const state = present.subarray(path * rule.states, (path + 1) * rule.states);
-      const from = shared ? 0 : path * rule.constants;
-      step(state, constants.subarray(from, from + rule.constants), inputs, t, state);
+      const from = shared ? 0 : path * rule.parameters;
+      step(state, parameters.subarray(from, from + rule.parameters), inputs, t, state);
       if (outside(state, limits)) state.fill(Number.NaN);
     }
   };
@@ -66,18 +66,18 @@ function interpretAdvance(rule: RuleGraph, step: CompiledRule["step"], shared: b
 
 function interpretSensitivities(rule: RuleGraph): CompiledRule["pathWithSensitivities"] {
   const width = rule.states;
-  const table = width * (rule.constants + width);
-  const { byState, byConstant } = stepDerivatives(rule);
-  const evaluateAll = graphEvaluator([...rule.next, ...byState.flat(), ...byConstant.flat()]);
-  return (initial, constants, inputs, from, periods, values, sensitivities) => {
+  const table = width * (rule.parameters + width);
+  const { byState, byParameter } = stepDerivatives(rule);
+  const evaluateAll = graphEvaluator([...rule.next, ...byState.flat(), ...byParameter.flat()]);
+  return (initial, parameters, inputs, from, periods, values, sensitivities) => {
     const state = initial.slice(0, width);
     values.set(state);
     sensitivities.fill(0, 0, table);
     for (let slot = 0; slot < width; slot++) {
-      sensitivities[slot * (rule.constants + width) + rule.constants + slot] = 1;
+      sensitivities[slot * (rule.parameters + width) + rule.parameters + slot] = 1;
     }
     for (let i = 1; i <= periods; i++) {
-      const read = evaluateAll({ state, constants, inputs, t: from + i - 1 });
+      const read = evaluateAll({ state, parameters, inputs, t: from + i - 1 });
       const before = sensitivities.subarray((i - 1) * table, i * table);
       nextSensitivities(rule, read, before, sensitivities.subarray(i * table, (i + 1) * table));
       rule.next.forEach((node, slot) => {

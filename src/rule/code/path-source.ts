@@ -2,7 +2,7 @@ import type { RuleGraph } from "../graph/rule-graph.js";
 import { emitProgram } from "./emit-program.js";
 import { lines, readArguments } from "./source-parts.js";
 
-/** Body of `step(state, constants, inputs, t, next)`. */
+/** Body of `step(state, parameters, inputs, t, next)`. */
 export function stepSource(rule: RuleGraph): string {
   const program = emitProgram(rule.next);
   return [
@@ -16,7 +16,7 @@ export function stepSource(rule: RuleGraph): string {
   ].join("\n");
 }
 
-/** Body of `path(initial, constants, inputs, from, periods, values)`. */
+/** Body of `path(initial, parameters, inputs, from, periods, values)`. */
 export function pathSource(rule: RuleGraph): string {
   const program = emitProgram(rule.next);
   return [

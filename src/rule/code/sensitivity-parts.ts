@@ -30,23 +30,23 @@ function nextLine(
   program: EmittedProgram,
   { slot, unknown }: SensitivityCell,
 ): string {
-  const { byState, byConstant } = stepDerivatives(rule);
+  const { byState, byParameter } = stepDerivatives(rule);
   const slopes = byState[slot]!.map(program.read);
   const terms = slopes.flatMap((slope, k) => {
     if (slope === "0" || !pattern[k]![unknown]) return [];
     return [slope === "1" ? `d${k}_${unknown}` : `${slope} * d${k}_${unknown}`];
   });
-  const own = unknown < rule.constants ? program.read(byConstant[slot]![unknown]!) : "0";
+  const own = unknown < rule.parameters ? program.read(byParameter[slot]![unknown]!) : "0";
   if (own !== "0") terms.push(own);
   return `const e${slot}_${unknown} = ${terms.length === 0 ? "0" : terms.join(" + ")};`;
 }
 
 /** Recurrence of the sensitivities: d x' / d p = sum over states (d f / d x)(d x / d p) + d f / d p. */
 export function sensitivityParts(rule: RuleGraph): SensitivityParts {
-  const { byState, byConstant } = stepDerivatives(rule);
-  const program = emitProgram([...rule.next, ...byState.flat(), ...byConstant.flat()]);
+  const { byState, byParameter } = stepDerivatives(rule);
+  const program = emitProgram([...rule.next, ...byState.flat(), ...byParameter.flat()]);
   const pattern = sensitivityPattern(rule);
-  const unknowns = rule.constants + rule.states;
+  const unknowns = rule.parameters + rule.states;
   const cells = rule.next.flatMap((_, slot) =>
     Array.from({ length: unknowns }, (_, unknown) => ({
       slot,
@@ -60,7 +60,7 @@ export function sensitivityParts(rule: RuleGraph): SensitivityParts {
     program,
     cells,
     declared: live.map(
-      ({ slot, unknown }) => `let d${slot}_${unknown} = ${unknown === rule.constants + slot ? 1 : 0};`,
+      ({ slot, unknown }) => `let d${slot}_${unknown} = ${unknown === rule.parameters + slot ? 1 : 0};`,
     ),
     next: live.map((cell) => nextLine(rule, pattern, program, cell)),
     moved: live.map(({ slot, unknown }) => `d${slot}_${unknown} = e${slot}_${unknown};`),

@@ -2,14 +2,14 @@ import type { RuleGraph } from "../graph/rule-graph.js";
 import { stepDerivatives } from "../graph/step-derivatives.js";
 
 /**
- * Which sensitivities can ever differ from zero, [slot][constants then initial states]: a slot depends on an
+ * Which sensitivities can ever differ from zero, [slot][parameters then initial states]: a slot depends on an
  * unknown at once, or through a slot that it reads.
  */
 export function sensitivityPattern(rule: RuleGraph): readonly (readonly boolean[])[] {
-  const { byState, byConstant } = stepDerivatives(rule);
+  const { byState, byParameter } = stepDerivatives(rule);
   const zero = rule.graph.number(0);
   const pattern = rule.next.map((_, slot) => [
-    ...byConstant[slot]!.map((node) => node !== zero),
+    ...byParameter[slot]!.map((node) => node !== zero),
     ...rule.next.map((_, initial) => initial === slot),
   ]);
   for (let changed = true; changed; ) {

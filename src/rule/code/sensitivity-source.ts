@@ -3,7 +3,7 @@ import { type SensitivityCell, sensitivityParts } from "./sensitivity-parts.js";
 import { lines, readArguments } from "./source-parts.js";
 
 /**
- * Body of `pathWithSensitivities(initial, constants, inputs, from, periods, values, sensitivities)`: one pass,
+ * Body of `pathWithSensitivities(initial, parameters, inputs, from, periods, values, sensitivities)`: one pass,
  * all in local variables.
  */
 export function sensitivitySource(rule: RuleGraph): string {

@@ -4,15 +4,15 @@ import { type EmittedProgram, emitProgram } from "./emit-program.js";
 import { lines, readArguments } from "./source-parts.js";
 
 /**
- * Body of `stepSums(constants, inputs, periods, from, observed, weights, sums)`: one step from every recorded state, and
+ * Body of `stepSums(parameters, inputs, periods, from, observed, weights, sums)`: one step from every recorded state, and
  * the sums of a least-squares fit in the same pass.
  *
  * @param logarithmic - compares log x with what is observed, instead of x.
  */
 export function stepSumsSource(rule: RuleGraph, logarithmic: boolean): string {
-  const { byConstant } = stepDerivatives(rule);
-  const program = emitProgram([...rule.next, ...byConstant.flat()]);
-  const unknowns = Array.from({ length: rule.constants }, (_, unknown) => unknown);
+  const { byParameter } = stepDerivatives(rule);
+  const program = emitProgram([...rule.next, ...byParameter.flat()]);
+  const unknowns = Array.from({ length: rule.parameters }, (_, unknown) => unknown);
   const pairs = unknowns.flatMap((a) => unknowns.slice(a).map((b) => `g${a}_${b}`));
   const sums = [...pairs, ...unknowns.map((a) => `h${a}`)];
   return [
@@ -33,7 +33,7 @@ export function stepSumsSource(rule: RuleGraph, logarithmic: boolean): string {
 
 /** Adds one slot of the present pair to the sums; a weight of 0 leaves it out. */
 function gatherSource(rule: RuleGraph, program: EmittedProgram, slot: number, logarithmic: boolean): string {
-  const slopes = stepDerivatives(rule).byConstant[slot]!.map((node, a) => ({
+  const slopes = stepDerivatives(rule).byParameter[slot]!.map((node, a) => ({
     a,
     source: program.read(node),
   }));

@@ -3,7 +3,7 @@ import { type SensitivityParts, sensitivityParts } from "./sensitivity-parts.js"
 import { lines, readArguments } from "./source-parts.js";
 
 /**
- * Body of `pathSums(initial, constants, inputs, from, periods, observed, weights, sums)`: the path, its
+ * Body of `pathSums(initial, parameters, inputs, from, periods, observed, weights, sums)`: the path, its
  * sensitivities and the sums of a least-squares fit in one pass. Nothing but the sums leaves the loop, so that the
  * sums of one period are worked out while the next period's state is still on its way.
  *
@@ -12,7 +12,7 @@ import { lines, readArguments } from "./source-parts.js";
 export function sumsSource(rule: RuleGraph, logarithmic: boolean): string {
   const parts = sensitivityParts(rule);
   const { program, declared, next, moved } = parts;
-  const unknowns = Array.from({ length: rule.constants + rule.states }, (_, unknown) => unknown);
+  const unknowns = Array.from({ length: rule.parameters + rule.states }, (_, unknown) => unknown);
   const pairs = unknowns.flatMap((a) => unknowns.slice(a).map((b) => `g${a}_${b}`));
   const products = unknowns.map((a) => `h${a}`);
   const gather = rule.next.map((_, slot) => gatherSource(parts, slot, logarithmic));

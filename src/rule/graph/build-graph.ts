@@ -75,7 +75,7 @@ export function buildGraph(rule: CheckedRule): RuleGraph {
     if (name === "t") return graph.leaf("period", 0);
     if (rule.states.includes(name)) return stateAt(name, -offset);
     if (rule.inputs.includes(name)) return graph.leaf("input", rule.inputs.indexOf(name), offset);
-    return quantities.get(name) ?? graph.leaf("constant", rule.constants.indexOf(name));
+    return quantities.get(name) ?? graph.leaf("parameter", rule.parameters.indexOf(name));
   };
   for (const { kind, name, expression } of rule.statements) {
     const node = nodeOf(graph, expression, meaningOf);
@@ -91,7 +91,7 @@ export function buildGraph(rule: CheckedRule): RuleGraph {
     quantities: rule.quantities.map((name) => quantities.get(name)!),
     states: rule.states.length + memory.length,
     observed: rule.states.length,
-    constants: rule.constants.length,
+    parameters: rule.parameters.length,
     inputs: rule.inputs.length,
   };
 }

@@ -31,7 +31,7 @@ export type Operator =
   | "asin";
 
 /** Where a leaf's value comes from. `slot` counts within the role; inputs also have an offset in periods. */
-export type LeafRole = "state" | "constant" | "input" | "period";
+export type LeafRole = "state" | "parameter" | "input" | "period";
 
 /**
  * A node of an expression graph. Equal expressions are one node (hash-consed), so identity is equality.

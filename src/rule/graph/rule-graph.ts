@@ -12,6 +12,6 @@ export interface RuleGraph {
   readonly states: number;
   /** How many of its slots are states; the others are kept past values. */
   readonly observed: number;
-  readonly constants: number;
+  readonly parameters: number;
   readonly inputs: number;
 }

@@ -6,8 +6,8 @@ import type { RuleGraph } from "./rule-graph.js";
 export interface StepDerivatives {
   /** [slot][slot]: next value of the first by present value of the second. */
   readonly byState: readonly (readonly Node[])[];
-  /** [slot][constant] */
-  readonly byConstant: readonly (readonly Node[])[];
+  /** [slot][parameter] */
+  readonly byParameter: readonly (readonly Node[])[];
 }
 
 const known = new WeakMap<RuleGraph, StepDerivatives>();
@@ -16,14 +16,14 @@ const known = new WeakMap<RuleGraph, StepDerivatives>();
 export function stepDerivatives(rule: RuleGraph): StepDerivatives {
   let found = known.get(rule);
   if (found === undefined) {
-    const by = (role: "state" | "constant", count: number): readonly (readonly Node[])[] => {
+    const by = (role: "state" | "parameter", count: number): readonly (readonly Node[])[] => {
       const columns = Array.from({ length: count }, (_, slot) => {
         const derivative = derivativeBy(rule.graph, rule.graph.leaf(role, slot));
         return rule.next.map(derivative);
       });
       return rule.next.map((_, row) => columns.map((column) => column[row]!));
     };
-    found = { byState: by("state", rule.states), byConstant: by("constant", rule.constants) };
+    found = { byState: by("state", rule.states), byParameter: by("parameter", rule.parameters) };
     known.set(rule, found);
   }
   return found;

@@ -15,15 +15,15 @@ function texTarget({ kind, name }: Statement): string {
 /**
  * A rule in the notation of a paper, one line a quantity, without dollar signs.
  *
- * @param values - by constant: the number to print in its place, as for a fitted rule; a text is printed as it
- *   is, a number in full. Other constants keep their symbols.
+ * @param values - by parameter: the number to print in its place, as for a fitted rule; a text is printed as it
+ *   is, a number in full. Other parameters keep their symbols.
  * @example ruleTex(recurrence("N[t+1] = R*N")); // "N_{t+1} = R\\,N_{t}"
  */
 export function ruleTex(rule: Rule, values: Readonly<Record<string, number | string>> = {}): string {
-  const constants = new Set(rule.constants);
+  const parameters = new Set(rule.parameters);
   const setName: SetName = (name, offset) => {
     if (name === "t") return "t";
-    if (!constants.has(name)) return texName(name, period(offset));
+    if (!parameters.has(name)) return texName(name, period(offset));
     return Object.hasOwn(values, name) ? texNumber(values[name]!) : texName(name, "");
   };
   return ruleDefinition(rule)

@@ -1,4 +1,4 @@
-/** A model of the collection: its value at constants b for the predictors x. */
+/** A model of the collection: its value at parameters b for the predictors x. */
 export type Model = (b: ArrayLike<number>, x: readonly number[]) => number;
 
 /** Models of the fixture's problems, as its source states them; the response of Nelson is log(y). */

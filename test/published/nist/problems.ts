@@ -16,7 +16,7 @@ export interface Problem {
 const file = join(__dirname, "../fixtures/nist/nonlinear-regression.json");
 export const problems: readonly Problem[] = JSON.parse(readFileSync(file, "utf8"));
 
-/** Residuals of a problem at constants b, in units of 1/`scale` of the data's. */
+/** Residuals of a problem at parameters b, in units of 1/`scale` of the data's. */
 export function residualsOf(problem: Problem, scale = 1): (b: ArrayLike<number>) => number[] {
   const model = models[problem.problem]!;
   const response = problem.problem === "Nelson" ? Math.log : (y: number) => y;

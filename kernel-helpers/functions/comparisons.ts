@@ -1,0 +1,88 @@
+import type { Fit } from "../../src/estimate/index.js";
+import {
+  type CompareOptions,
+  type Comparison,
+  compare as compareFits,
+  type RollingOrigin,
+} from "../../src/evidence/index.js";
+import { showing, type Table, table } from "../tables/index.js";
+import { caseLog } from "./case-log.js";
+import { shownTogether } from "./shown-together.js";
+
+/**
+ * Sets fits of rival rules side by side; the result shows the table of evidence and its verdict in words, forecasts from
+ * earlier parts of the record beside naive ones, and with `decide` what each rule that stands leads to.
+ *
+ * @example compare([crowdingFit, shelteredFit]).sentence;
+ */
+export function compare(fits: readonly Fit[], options: CompareOptions = {}): Comparison {
+  const compared = compareFits(fits, options);
+  caseLog.noteStep(`compared: ${compared.sentence}`);
+  const { kind, rules } = compared.verdict;
+  const others = compared.rows.map((row) => row.rule).filter((rule) => !rules.includes(rule));
+  if (kind === "supported" || kind === "undecided") caseLog.noteVerdict(rules, others);
+  return showing({ ...compared }, () =>
+    shownTogether([
+      comparisonTable(compared),
+      compared.decisions.length > 0 ? decisionsTable(compared) : undefined,
+      compared.rollingOrigin && forecastsTable(compared.rollingOrigin, fits),
+    ]),
+  );
+}
+
+function comparisonTable(compared: Comparison): Table {
+  return table({
+    title: "Rival rules on one record",
+    columns: [
+      { key: "rule", label: "Rule", kind: "text" },
+      { key: "unknowns", label: "Unknowns", kind: "integer" },
+      { key: "count", label: "Residuals", kind: "integer" },
+      { key: "aicCorrected", label: "AICc", kind: "number", digits: 5 },
+      { key: "difference", label: "Above the lowest", kind: "number", digits: 3 },
+      { key: "weight", label: "Weight", kind: "probability" },
+      { key: "determined", label: "Parameters determined", kind: "text" },
+    ],
+    rows: compared.rows.map((row) => ({ ...row, determined: row.undetermined ? "not all" : "all" })),
+    notes: [
+      compared.sentence,
+      ...compared.likelihoodRatios.map((ratio) => `${ratio.sentence.replace(/\.$/, "")}.`),
+      ...compared.notes,
+    ],
+  });
+}
+
+function decisionsTable(compared: Comparison): Table {
+  return table({
+    title: "What each rule that stands leads to",
+    columns: [
+      { key: "rule", label: "Rule", kind: "text" },
+      { key: "decision", label: "Decision", kind: "text" },
+    ],
+    rows: compared.decisions.map((decision) => ({ ...decision })),
+  });
+}
+
+function forecastsTable(rolled: RollingOrigin, [fit]: readonly Fit[]): Table {
+  const unit = fit?.observations.states[0]?.unit ?? "";
+  const score = { kind: "number", digits: 3, unit } as const;
+  const percent = Math.round(100 * rolled.level);
+  return table({
+    title: "Forecasts from earlier parts of the record",
+    columns: [
+      { key: "name", label: "Forecast by", kind: "text" },
+      { key: "meanAbsoluteError", label: "Mean absolute error", ...score },
+      { key: "scaledError", label: "In mean changes of the record", kind: "number", digits: 3 },
+      { key: "coverage", label: `Inside the ${percent}% interval`, kind: "percent", digits: 0 },
+      { key: "intervalScore", label: "Interval score", ...score },
+      { key: "crps", label: "Ranked probability score", ...score },
+    ],
+    rows: rolled.scores.map((row) => ({
+      ...row,
+      name: row.kind === "naive" ? `${row.name} (naive)` : row.name,
+    })),
+    notes: [
+      `${rolled.forecasts} values forecast from ${rolled.origins} origins, up to ${rolled.periods} periods ahead; each rule fitted afresh to what was recorded until then.`,
+      "Interval score and ranked probability score: lower is better.",
+    ],
+  });
+}

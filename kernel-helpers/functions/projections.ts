@@ -1,0 +1,50 @@
+import type { Fit } from "../../src/estimate/index.js";
+import {
+  type Forecast,
+  type ForecastOptions,
+  forecast as forecastFit,
+  type SimulateOptions,
+  type Simulation,
+  simulate as simulateRule,
+} from "../../src/projection/index.js";
+import type { Rule } from "../../src/rule/index.js";
+import { withProgress } from "../progress/index.js";
+import { showing } from "../tables/index.js";
+import { caseLog } from "./case-log.js";
+import { showForecast } from "./show-forecast.js";
+import { showSimulation } from "./show-simulation.js";
+import { shownTogether } from "./shown-together.js";
+
+/**
+ * Carries a fit forward; the result shows the path with its bands and the numbers at the recorded periods ahead.
+ *
+ * Inputs of the rule need a plan, or several as scenarios. The seed is the case's unless one is given.
+ *
+ * @example forecast(fitted, { periods: 20 });
+ */
+export function forecast(fit: Fit, options: ForecastOptions): Forecast {
+  const ahead = withProgress("Forecast", undefined, ({ at }) =>
+    forecastFit(fit, { seed: caseLog.seed(), onProgress: at, ...options }),
+  );
+  caseLog.noteStep(
+    `forecast "${fit.rule.text}" over ${options.periods} periods, ${ahead.options.paths} paths`,
+  );
+  caseLog.noteForecast(fit.rule.text);
+  return showing({ ...ahead }, () => shownTogether(showForecast(ahead)));
+}
+
+/**
+ * Runs a rule from given parameters, with random change where there is any; the result shows the paths, scenario by
+ * scenario, with their bands.
+ *
+ * @example
+ * const rule = recurrence("N[t+1] = R*N");
+ * simulate(rule, { parameters: { R: 1.1 }, initial: { N: 100 }, periods: 2 }).groups[0].states[0].central.length // 3
+ */
+export function simulate(rule: Rule, options: SimulateOptions): Simulation {
+  const run = withProgress("Simulation", undefined, ({ at }) =>
+    simulateRule(rule, { seed: caseLog.seed(), onProgress: at, ...options }),
+  );
+  caseLog.noteStep(`simulated "${rule.text}" over ${options.periods} periods, ${run.options.paths} paths`);
+  return showing({ ...run }, () => shownTogether(showSimulation(run)));
+}

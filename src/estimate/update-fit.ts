@@ -1,0 +1,119 @@
+import type { Observations, ObservedGroup } from "../record/index.js";
+import type { Fit } from "./fit.js";
+import { fit as fitRule } from "./fit.js";
+import { matchStates } from "./options/match-states.js";
+import { refuseNoNewRows, refuseOverlap, refuseUnknownName } from "./refusals.js";
+
+/** How one estimate changed when rows were added. */
+export interface EstimateChange {
+  readonly group: string;
+  readonly name: string;
+  readonly was: number;
+  readonly now: number;
+  /** (now - was) in standard errors of the fit before; undefined where it had none. */
+  readonly moved: number | undefined;
+  readonly standardErrorWas: number | undefined;
+  readonly standardErrorNow: number | undefined;
+}
+
+/** A fit brought up to date with rows that came in later. */
+export interface UpdatedFit {
+  readonly kind: "updated-fit";
+  readonly fit: Fit;
+  /** Rows added, by group. */
+  readonly added: Readonly<Record<string, number>>;
+  readonly changes: readonly EstimateChange[];
+  /** A sentence for every estimate that moved by more than two of its standard errors. */
+  readonly remarks: readonly string[];
+}
+
+/** Moves beyond this many standard errors are pointed out: common practice, no source. */
+const notable = 2;
+
+/**
+ * Adds later rows of the record and fits again with the same options, from the estimates before.
+ *
+ * @param later - rows after those of the fit, read with the same options; groups are matched by name.
+ * @throws {ModelError} `no-new-rows` | `rows-overlap` | `unknown-name` (a group that the fit does not have), and those of `fit`.
+ * @example
+ * const hourly = { period: "hour", step: { every: 1, of: "hour" }, value: "N" };
+ * const early = fit(crowding, observations({ hour: [0, 1, 2, 3, 4, 5, 6], N: [10, 18, 31, 50, 69, 85, 93] }, hourly), { errors: "observation" });
+ * updateFit(early, observations({ hour: [7, 8], N: [96, 99] }, hourly)).added[""]; // 2
+ */
+export function updateFit(before: Fit, later: Observations): UpdatedFit {
+  const more = matchStates(before.rule, later);
+  const known = before.observations.groups.map((group) => group.name);
+  for (const { name } of more.groups)
+    if (!known.includes(name)) throw refuseUnknownName(name, known, "group");
+  const added: Record<string, number> = {};
+  const groups = before.observations.groups.map((group) => {
+    const rows = more.groups.find((each) => each.name === group.name);
+    added[group.name] = rows?.index.length ?? 0;
+    return rows === undefined ? group : joined(group, rows, before.observations.period.step.every);
+  });
+  if (Object.values(added).every((count) => count === 0)) throw refuseNoNewRows();
+  const now = fitRule(before.rule, { ...before.observations, groups }, before.options);
+  const changes = before.groups.flatMap((was, g) => changesOf(was, now.groups[g]!));
+  const remarks = changes
+    .filter(({ moved }) => moved !== undefined && Math.abs(moved) > notable)
+    .map(
+      ({ group, name, was, now: is, moved }) =>
+        `${name}${group && ` of ${group}`} moved from ${was.toPrecision(4)} to ${is.toPrecision(4)}, ${Math.abs(moved!).toFixed(1)} standard errors: check whether the rule still holds.`,
+    );
+  return Object.freeze({ kind: "updated-fit", fit: now, added, changes: Object.freeze(changes), remarks });
+}
+
+/** A group with later rows behind its own; their steps are counted on from its first row. */
+function joined(group: ObservedGroup, later: ObservedGroup, every: number): ObservedGroup {
+  const shift = Math.round((later.time[0]! - group.time[0]!) / every);
+  if (shift <= group.index[group.index.length - 1]!) throw refuseOverlap(group.name, later.time[0]!);
+  const append = (a: Float64Array, b: Float64Array | undefined): Float64Array =>
+    Float64Array.from([...a, ...(b ?? new Float64Array(later.index.length).fill(Number.NaN))]);
+  const { weights, censoring, replicates: _, labels: __, ...rest } = group;
+  const marks = (from: ObservedGroup, state: string): ArrayLike<number> =>
+    from.censoring?.[state] ?? new Int8Array(from.index.length);
+  return {
+    ...rest,
+    index: Int32Array.from([...group.index, ...later.index.map((index) => index + shift)]),
+    time: append(group.time, later.time),
+    rows: Int32Array.from([
+      ...group.rows,
+      ...later.rows.map((row) => row + group.rows[group.rows.length - 1]!),
+    ]),
+    values: mapped(group.values, (column, state) => append(column, later.values[state])),
+    inputs: mapped(group.inputs, (column, input) => append(column, later.inputs[input])),
+    ...((weights ?? later.weights) && { weights: append(weightsOf(group), weightsOf(later)) }),
+    ...((censoring ?? later.censoring) && {
+      censoring: mapped(group.values, (_column, state) =>
+        Int8Array.from([...Array.from(marks(group, state)), ...Array.from(marks(later, state))]),
+      ),
+    }),
+  };
+}
+
+function weightsOf(group: ObservedGroup): Float64Array {
+  return group.weights ?? new Float64Array(group.index.length).fill(1);
+}
+
+function mapped<A, B>(
+  columns: Readonly<Record<string, A>>,
+  of: (column: A, name: string) => B,
+): Record<string, B> {
+  return Object.fromEntries(Object.entries(columns).map(([name, column]) => [name, of(column, name)]));
+}
+
+function changesOf(was: Fit["groups"][number], now: Fit["groups"][number]): EstimateChange[] {
+  return was.estimates.map((before, i) => {
+    const after = now.estimates[i]!;
+    const error = before.standardError;
+    return {
+      group: was.group,
+      name: before.name,
+      was: before.value,
+      now: after.value,
+      moved: error === undefined ? undefined : (after.value - before.value) / error,
+      standardErrorWas: error,
+      standardErrorNow: after.standardError,
+    };
+  });
+}
