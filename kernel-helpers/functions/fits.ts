@@ -5,6 +5,7 @@ import {
   type FitOptions,
   fit as fitRule,
   type GroupFit,
+  problemOf,
   secondOpinion,
 } from "../../src/estimate/index.js";
 import type { Observations } from "../../src/record/index.js";
@@ -43,7 +44,7 @@ function estimatesTable(fitted: Fit): Table {
     lower: limit(row.profile.lower),
     upper: limit(row.profile.upper),
   }));
-  const percent = `${100 * (fitted.options.level ?? 0.95)}%`;
+  const percent = `${100 * problemOf(fitted).level}%`;
   return table({
     title: `Estimates of ${fitted.rule.text}`,
     columns: [
@@ -71,12 +72,11 @@ function estimatesTable(fitted: Fit): Table {
 
 function groupNotes(fitted: Fit, group: GroupFit): string[] {
   const who = group.group === "" ? "" : `${group.group}: `;
-  const { digits, sentence } = secondOpinion(fitted, group);
-  const told =
-    digits !== undefined && fitted.groups.length > 1 ? `second solver agrees to ${digits} digits` : sentence;
+  const opinion = fitted.groups.length === 1 ? secondOpinion(fitted, group) : undefined;
+  const criteria = group.criteria === undefined ? "" : `, AICc ${group.criteria.aicCorrected.toFixed(2)}`;
   const sigma = group.sigma.toPrecision(3);
   return [
-    `${who}${group.count} residuals, sigma ${sigma}, AICc ${group.criteria.aicCorrected.toFixed(2)}. ${told}`,
+    `${who}${group.count} residuals, sigma ${sigma}${criteria}.${opinion ? ` ${opinion.sentence}` : ""}`,
   ];
 }
 
@@ -101,23 +101,18 @@ function observedAndFitted(fitted: Fit): Figure[] {
   );
 }
 
-/** Whether a profile is one of a sum of squares. */
-function bySquares({ options }: Fit, { estimates: all }: GroupFit): boolean {
-  const counts = options.distribution === "poisson" || options.distribution === "negative-binomial";
-  return !counts && all.every(({ role }) => role !== "scale");
-}
-
 /** Profiles of every parameter; of one group, because a figure of many profiles is read by nobody. */
 function profiles(fitted: Fit): Figure | undefined {
   const [group] = fitted.groups;
   if (group === undefined || fitted.groups.length > 1) return undefined;
   return profileFigure({
     title: "Profiles of the parameters",
-    measure: bySquares(fitted, group)
-      ? "Rise of the sum of squares / sigma²"
-      : "Twice the fall of the log-likelihood",
+    measure:
+      problemOf(fitted).group(group.group).kind === "least-squares"
+        ? "Rise of the sum of squares / sigma²"
+        : "Twice the fall of the log-likelihood",
     cut: group.cut,
-    level: `${100 * (fitted.options.level ?? 0.95)}%`,
+    level: `${100 * problemOf(fitted).level}%`,
     profiles: group.estimates.map(({ name, unit, value, profile, trace }) => ({
       parameter: name,
       unit,

@@ -1,6 +1,5 @@
 import type { Observations, ObservedGroup } from "../record/index.js";
-import type { Fit } from "./fit.js";
-import { fit as fitRule } from "./fit.js";
+import { type Fit, problemOf } from "./fit.js";
 import { matchStates } from "./options/match-states.js";
 import { refuseNoNewRows, refuseOverlap, refuseUnknownName } from "./refusals.js";
 
@@ -52,7 +51,7 @@ export function updateFit(before: Fit, later: Observations): UpdatedFit {
     return rows === undefined ? group : joined(group, rows, before.observations.period.step.every);
   });
   if (Object.values(added).every((count) => count === 0)) throw refuseNoNewRows();
-  const now = fitRule(before.rule, { ...before.observations, groups }, before.options);
+  const now = problemOf(before).refit({ observations: { ...before.observations, groups } });
   const changes = before.groups.flatMap((was, g) => changesOf(was, now.groups[g]!));
   const remarks = changes
     .filter(({ moved }) => moved !== undefined && Math.abs(moved) > notable)

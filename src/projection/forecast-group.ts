@@ -1,4 +1,4 @@
-import type { Fit, GroupFit } from "../estimate/index.js";
+import { type Fit, type GroupFit, problemOf } from "../estimate/index.js";
 import type { RandomStream } from "../numeric/index.js";
 import { readsPeriod } from "../rule/index.js";
 import { type CentralPath, centralPath, stateLimits } from "./central-path.js";
@@ -11,7 +11,6 @@ import { type FitGround, fitGround } from "./fit-ground.js";
 import type { ForecastOptions, ForecastSettings } from "./forecast-options.js";
 import { forecastWarnings } from "./forecast-warnings.js";
 import type { Scenario } from "./inputs/scenarios.js";
-import { fittedNoise } from "./noise/fitted-noise.js";
 import { noiseDraw } from "./noise/noise.js";
 import { type DrawnStarts, drawnStarts, type UnknownsDraw, unknownsDraw } from "./parameters/drawn-starts.js";
 import { periodLabels } from "./period-labels.js";
@@ -84,7 +83,7 @@ function projected(
       future: futures.flatMap((state) => state.paths ?? []),
       discarded: starts.discarded,
     },
-    passages: passagesOf(placedWatches(rule, options.watch), passagesFor(fit, mean, future)),
+    passages: passagesOf(placedWatches(rule, options.watch), passagesFor(fit, group, mean, future)),
     left,
     leftError: Math.sqrt((left * (1 - left)) / options.paths),
     ...(predictability && { predictability }),
@@ -136,7 +135,7 @@ function runBoth(
     limits: stateLimits(rule),
     streams,
   };
-  const { change, reading } = fittedNoise(fit, ground.group);
+  const { change, reading } = problemOf(fit).group(ground.group.group).noise;
   runEnsemble({ ...run, change: none, reading: none, onRow: mean.onRow, onProgress: half(0) });
   runEnsemble({
     ...run,
@@ -149,9 +148,10 @@ function runBoth(
   return { mean, future };
 }
 
-/** An answer about the process is read from the process: with reading errors, from the paths without them. */
-function passagesFor(fit: Fit, mean: Gatherer, future: Gatherer): readonly Float64Array[] {
-  return fit.options.errors === "observation" ? mean.passages : future.passages;
+/** An answer about the process is read from the process: with reading errors alone, from the paths without them. */
+function passagesFor(fit: Fit, { group }: GroupFit, mean: Gatherer, future: Gatherer): Gatherer["passages"] {
+  const { change } = problemOf(fit).group(group).noise;
+  return change.every((noise) => noise === undefined) ? mean.passages : future.passages;
 }
 
 function predicted(ground: FitGround, starts: DrawnStarts, firstError: number): Predictability | undefined {

@@ -18,7 +18,6 @@ export type { ForecastOptions } from "./forecast-options.js";
 export type { InputPlan, InputPlans } from "./inputs/input-plan.js";
 export { plannedInputs } from "./inputs/planned-inputs.js";
 export type { Scenarios } from "./inputs/scenarios.js";
-export { fittedNoise } from "./noise/fitted-noise.js";
 export { type Noise, type NoiseDraw, noiseDraw } from "./noise/noise.js";
 export { ruleNoise } from "./noise/rule-noise.js";
 export { type DrawnStarts, drawnStarts, unknownsDraw } from "./parameters/drawn-starts.js";

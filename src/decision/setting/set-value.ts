@@ -1,3 +1,4 @@
+import { problemOf } from "../../estimate/index.js";
 import type { Ground, InputPlan } from "../../projection/index.js";
 import { type Standing, stateOf } from "./standing.js";
 
@@ -20,7 +21,7 @@ const open: readonly [number, number] = [Number.NEGATIVE_INFINITY, Number.POSITI
 export function settingOf(standing: Standing, name: string): Setting {
   const { rule, ground } = standing;
   const parameter = rule.parameters.indexOf(name);
-  const bounds = standing.fit?.options.bounds?.[name] ?? rule.bounds[name] ?? open;
+  const bounds = standing.fit ? problemOf(standing.fit).bounds(name) : (rule.bounds[name] ?? open);
   if (parameter >= 0)
     return {
       name,

@@ -1,9 +1,8 @@
 import { type InitialValues, initialVector, parametersBySlot } from "../../dynamics/index.js";
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import {
   type FitGround,
   fitGround,
-  fittedNoise,
   type Ground,
   type InputPlans,
   type Noise,
@@ -83,7 +82,7 @@ function fitStanding(fit: Fit, options: StandingOptions): Standing {
     fitGround: ground,
     present: ground.recordEnd - ground.from,
     timeAt: (row) => first + (ground.from + row) * step,
-    change: fittedNoise(fit, group).change,
+    change: problemOf(fit).group(group.group).noise.change,
     plans: options.inputs ?? {},
     paths: options.paths ?? 2000,
     seed: options.seed ?? 1,

@@ -1,4 +1,4 @@
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import { chiSquareCdf } from "../../numeric/index.js";
 import { nestingOf } from "./nesting.js";
 
@@ -28,21 +28,25 @@ export interface LikelihoodRatio {
 export function likelihoodRatios(fits: readonly Fit[]): readonly LikelihoodRatio[] {
   return fits.flatMap((smaller) =>
     fits.flatMap((larger) => {
-      if (smaller === larger || smaller.options.distribution !== larger.options.distribution) return [];
+      if (smaller === larger || !areLike(smaller, larger)) return [];
       const nesting = nestingOf(smaller, larger);
       return nesting ? [ratioOf(smaller, larger, nesting.at)] : [];
     }),
   );
 }
 
+/** Whether two fits take groups and errors alike, so that only their rules differ. */
+function areLike(one: Fit, other: Fit): boolean {
+  const [a, b] = [problemOf(one), problemOf(other)];
+  return a.distribution === b.distribution && a.groups === b.groups;
+}
+
 function ratioOf(smaller: Fit, larger: Fit, at: Readonly<Record<string, number>>): LikelihoodRatio {
-  const total = (fit: Fit): number =>
-    fit.groups.reduce((sum, group) => sum + group.criteria.logLikelihood, 0);
-  const statistic = Math.max(0, 2 * (total(larger) - total(smaller)));
+  const statistic = Math.max(0, 2 * (larger.criteria.logLikelihood - smaller.criteria.logLikelihood));
   const names = Object.keys(at);
-  const degreesOfFreedom = names.length * larger.groups.length;
-  const bounds = { ...larger.rule.bounds, ...larger.options.bounds };
-  const edge = names.filter((name) => bounds[name]?.includes(at[name]!));
+  const degreesOfFreedom = larger.criteria.counted - smaller.criteria.counted;
+  const { bounds } = problemOf(larger);
+  const edge = names.filter((name) => bounds(name).includes(at[name]!));
   const probability = edge.length > 0 ? undefined : 1 - chiSquareCdf(statistic, degreesOfFreedom);
   const base = {
     smaller: smaller.rule.text,
