@@ -1,5 +1,5 @@
 import type { Algebra } from "./graph/evaluate-over.js";
-import { everywhere, type Interval, minus, plus, times } from "./graph/interval.js";
+import { type Interval, minus, plus, times, wholeLine } from "./graph/interval.js";
 import type { Operator } from "./graph/node.js";
 import type { Rule } from "./rule.js";
 import { intervalAlgebra, type PlaceOver, stepOver } from "./step-over.js";
@@ -19,11 +19,11 @@ export interface HeldValues {
 const exactly = (value: number): Interval => [value, value];
 
 /** Operations at which a value may jump, and whether an interval of results shows that it does there. */
-const jumping: readonly Operator[] = ["floor", "ceil", "round", "sign", "mod", "choose"];
+const jumpOperators: readonly Operator[] = ["floor", "ceil", "round", "sign", "mod", "choose"];
 
 /** Intervals that note when a jump may lie inside: there no slope bounds the change of the value. */
-function jumpNotingAlgebra(note: () => void): Algebra<Interval> {
-  const noted = (operator: Operator): Algebra<Interval>["operations"][Operator] => {
+function jumpDetectingAlgebra(note: () => void): Algebra<Interval> {
+  const withDetection = (operator: Operator): Algebra<Interval>["operations"][Operator] => {
     const plain = intervalAlgebra.operations[operator];
     const whole = operator === "floor" || operator === "ceil" || operator === "sign";
     return (a, b, c) => {
@@ -34,11 +34,11 @@ function jumpNotingAlgebra(note: () => void): Algebra<Interval> {
     };
   };
   const operations = { ...intervalAlgebra.operations };
-  for (const operator of jumping) operations[operator] = noted(operator);
+  for (const operator of jumpOperators) operations[operator] = withDetection(operator);
   return { ...intervalAlgebra, operations };
 }
 
-const meet = (a: Interval, b: Interval): Interval => [Math.max(a[0], b[0]), Math.min(a[1], b[1])];
+const intersection = (a: Interval, b: Interval): Interval => [Math.max(a[0], b[0]), Math.min(a[1], b[1])];
 
 /**
  * For a rule of one state: a function that encloses the next value and its slope over an interval, past values
@@ -50,7 +50,7 @@ export function encloseStep(rule: Rule, held: HeldValues): (present: Interval) =
   let jumps = false;
   const step = stepOver(
     rule,
-    jumpNotingAlgebra(() => {
+    jumpDetectingAlgebra(() => {
       jumps = true;
     }),
   );
@@ -68,11 +68,11 @@ export function encloseStep(rule: Rule, held: HeldValues): (present: Interval) =
     const place = placeOf(present);
     const value = step.next(place)[0]!;
     const slope = step.slopes(place)[0]!.reduce(plus);
-    if (jumps) return { value, slope: everywhere };
+    if (jumps) return { value, slope: wholeLine };
     const middle = present[0] + (present[1] - present[0]) / 2;
     const center = step.next(placeOf(exactly(middle)))[0]!;
     const centered = plus(center, times(slope, minus(present, exactly(middle))));
     const usable = Number.isFinite(centered[0]) && Number.isFinite(centered[1]) && !Number.isNaN(value[0]);
-    return { value: usable ? meet(value, centered) : value, slope };
+    return { value: usable ? intersection(value, centered) : value, slope };
   };
 }

@@ -23,7 +23,7 @@ const jumping: ReadonlySet<string> = new Set(["floor", "ceil", "round", "sign", 
 function callsIn(at: Expression): readonly Extract<Expression, { kind: "call" }>[] {
   if (at.kind === "unary") return callsIn(at.operand);
   if (at.kind === "binary") return [...callsIn(at.left), ...callsIn(at.right)];
-  return at.kind === "call" ? [at, ...at.inside.flatMap(callsIn)] : [];
+  return at.kind === "call" ? [at, ...at.args.flatMap(callsIn)] : [];
 }
 
 /**
@@ -35,7 +35,7 @@ function callsIn(at: Expression): readonly Extract<Expression, { kind: "call" }>
 export function roughness(rule: Rule): Roughness {
   const fixed = new Set(["t", ...rule.inputs]);
   const moves = (call: Extract<Expression, { kind: "call" }>): boolean => {
-    const decisive = call.name === "if" ? call.inside.slice(0, 1) : call.inside;
+    const decisive = call.name === "if" ? call.args.slice(0, 1) : call.args;
     return decisive.flatMap(readNames).some(({ name }) => !fixed.has(name));
   };
   const calls = ruleDefinition(rule).checked.statements.flatMap(({ expression }) => callsIn(expression));
