@@ -54,7 +54,7 @@ export function encloseStep(rule: Rule, held: HeldValues): (present: Interval) =
       jumps = true;
     }),
   );
-  const width = 1 + rule.memory.length;
+  const width = 1 + rule.lags.length;
   const parameters = Array.from(held.parameters, exactly);
   const inputs = Array.from(held.inputs, exactly);
   const placeOf = (present: Interval): PlaceOver<Interval> => ({

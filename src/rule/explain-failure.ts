@@ -113,7 +113,7 @@ function valuesAt(rule: Rule, place: StepPlace, quantities: ReadonlyMap<string, 
     if (name === "t") return place.t;
     const input = rule.inputs.indexOf(name);
     if (input >= 0) return place.inputs[input]?.[place.t + offset] ?? Number.NaN;
-    const kept = rule.memory.findIndex(({ state, lag }) => state === name && lag === -offset);
+    const kept = rule.lags.findIndex(({ state, lag }) => state === name && lag === -offset);
     if (offset < 0 && kept >= 0) return place.state[rule.states.length + kept]!;
     const state = rule.states.indexOf(name);
     if (state >= 0) return place.state[state]!;

@@ -35,7 +35,7 @@ export function makeRule(text: string, options: RecurrenceOptions, named?: Named
     text: normal,
     form: first.kind === "change" ? "change" : "next",
     states: Object.freeze([...checked.states]),
-    memory: Object.freeze(laggedStates(checked).map((kept) => Object.freeze(kept))),
+    lags: Object.freeze(laggedStates(checked).map((kept) => Object.freeze(kept))),
     quantities: Object.freeze([...checked.quantities]),
     inputs: Object.freeze([...checked.inputs]),
     parameters: Object.freeze([...checked.parameters]),

@@ -91,7 +91,7 @@ export function attractor(rule: Rule, options: AttractorOptions): Attractor {
 
 /** The same first value for every state and every past value that the rule reads. */
 function everywhere(rule: Rule, start: number): Record<string, readonly number[]> {
-  const lags = (state: string): number => rule.memory.filter((kept) => kept.state === state).length;
+  const lags = (state: string): number => rule.lags.filter((kept) => kept.state === state).length;
   return Object.fromEntries(
     rule.states.map((state) => [state, new Array<number>(lags(state) + 1).fill(start)]),
   );

@@ -35,7 +35,7 @@ export function holdStep(rule: Rule, setting: HeldSetting, what: string): HeldSt
   const parameters = parametersBySlot(rule, setting.parameters);
   const inputs = heldInputs(rule, setting.inputs);
   const compiled = compileRule(rule);
-  const width = rule.states.length + rule.memory.length;
+  const width = rule.states.length + rule.lags.length;
   // Columns long enough for every period that a leap reads, with its first step in their middle.
   const reach = Math.max(0, ...inputReach(rule).flatMap(([earliest, latest]) => [-earliest, latest]));
   const columns = Array.from(inputs, (value) => new Float64Array(2 * reach + longestLeap).fill(value));
@@ -80,6 +80,6 @@ export function holdStep(rule: Rule, setting: HeldSetting, what: string): HeldSt
 export function settled(rule: Rule, present: ArrayLike<number>): Float64Array {
   return Float64Array.from([
     ...rule.states.map((_, slot) => present[slot]!),
-    ...rule.memory.map(({ state }) => present[rule.states.indexOf(state)]!),
+    ...rule.lags.map(({ state }) => present[rule.states.indexOf(state)]!),
   ]);
 }
