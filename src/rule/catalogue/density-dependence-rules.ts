@@ -19,7 +19,7 @@ const logistic: CatalogueEntry = {
   text: "ΔN = r*N*(1 - N/K)",
   source: "May (1976), Simple mathematical models with very complicated dynamics, Nature 261, 459-467",
   quantities: { N: level, r: rate, K: carryingCapacity },
-  holds: ["r > 0", "r <= 3", "K > 0", "N0 >= 0 and N0 <= K*(1 + 1/r)"],
+  validWhen: ["r > 0", "r <= 3", "K > 0", "N0 >= 0 and N0 <= K*(1 + 1/r)"],
   bounds: { r: positive, K: positive, N: positive },
   start: { r: 0.5 },
   equilibria: [
@@ -40,7 +40,7 @@ const bevertonHolt: CatalogueEntry = {
   text: "N[t+1] = R*N/(1 + (R - 1)*N/K)",
   source: "Beverton and Holt (1957), On the Dynamics of Exploited Fish Populations",
   quantities: { N: level, R: growthFactor, K: carryingCapacity },
-  holds: ["R > 1", "K > 0", "N0 >= 0"],
+  validWhen: ["R > 1", "K > 0", "N0 >= 0"],
   bounds: { R: aboveOne, K: positive, N: positive },
   start: { R: 1.5 },
   equilibria: [
@@ -57,7 +57,7 @@ const ricker: CatalogueEntry = {
   text: "N[t+1] = N*exp(r*(1 - N/K))",
   source: "Ricker (1954), Stock and recruitment, J. Fish. Res. Board Can. 11, 559-623",
   quantities: { N: level, r: rate, K: carryingCapacity },
-  holds: ["r > 0", "K > 0", "N0 >= 0"],
+  validWhen: ["r > 0", "K > 0", "N0 >= 0"],
   bounds: { r: positive, K: positive, N: positive },
   start: { r: 0.5 },
   equilibria: [
@@ -79,7 +79,7 @@ const hassell: CatalogueEntry = {
     a: perStateUnit("crowding"),
     b: dimensionless("how sharply crowding acts"),
   },
-  holds: ["lam > 1", "a > 0", "b > 0", "N0 >= 0"],
+  validWhen: ["lam > 1", "a > 0", "b > 0", "N0 >= 0"],
   bounds: { lam: aboveOne, a: positive, b: positive, N: positive },
   start: { lam: 1.5, b: 1 },
   equilibria: [
@@ -102,7 +102,7 @@ const maynardSmithSlatkin: CatalogueEntry = {
     a: perStateUnit("crowding"),
     b: dimensionless("how sharply crowding acts"),
   },
-  holds: ["lam > 1", "a > 0", "b > 0", "N0 >= 0"],
+  validWhen: ["lam > 1", "a > 0", "b > 0", "N0 >= 0"],
   bounds: { lam: aboveOne, a: positive, b: positive, N: positive },
   start: { lam: 1.5, b: 1 },
   equilibria: [
@@ -121,7 +121,7 @@ const thetaLogistic: CatalogueEntry = {
   source:
     "Gilpin and Ayala (1973), Global models of growth and competition, PNAS 70, 3590-3593, in Ricker's form",
   quantities: { N: level, r: rate, K: carryingCapacity, theta: dimensionless("how late crowding sets in") },
-  holds: ["r > 0", "K > 0", "theta > 0", "N0 >= 0"],
+  validWhen: ["r > 0", "K > 0", "theta > 0", "N0 >= 0"],
   bounds: { r: positive, K: positive, theta: positive, N: positive },
   start: { r: 0.5, theta: 1 },
   equilibria: [
@@ -142,7 +142,7 @@ const gompertz: CatalogueEntry = {
     a: dimensionless("intercept on the log scale"),
     b: dimensionless("slope on the log scale"),
   },
-  holds: ["abs(b) < 1", "N0 > 0"],
+  validWhen: ["abs(b) < 1", "N0 > 0"],
   bounds: { b: [-1, 1], N: positive },
   start: { b: 0.8 },
   equilibria: [{ at: { N: "exp(a/(1 - b))" }, multiplier: "b" }],
@@ -158,7 +158,7 @@ const allee: CatalogueEntry = {
   source:
     "Allee (1931), Animal Aggregations, for the effect; the exponential form is common practice, no source",
   quantities: { N: level, r: rate, K: carryingCapacity, A: inStateUnit("level below which it collapses") },
-  holds: ["r > 0", "A > 0", "A < K", "N0 >= 0"],
+  validWhen: ["r > 0", "A > 0", "A < K", "N0 >= 0"],
   bounds: { r: positive, K: positive, A: positive, N: positive },
   start: { r: 0.3 },
   equilibria: [

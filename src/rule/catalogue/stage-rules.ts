@@ -28,7 +28,7 @@ function ages(count: number): CatalogueEntry {
       ...record(fertilities, dimensionless("young a period from one of that age")),
       ...record(survivals, dimensionless("share that lives on to the next age")),
     },
-    holds: [
+    validWhen: [
       ...fertilities.map((name) => `${name} >= 0`),
       ...survivals.map((name) => `${name} >= 0 and ${name} <= 1`),
     ],
@@ -72,7 +72,7 @@ function stages({ stages: names, moves }: StageOption): CatalogueEntry {
         all.map(([from, to]) => [share(from, to), dimensionless(`share of ${from} that moves to ${to}`)]),
       ),
     },
-    holds: shares.map((name) => `${name} >= 0`),
+    validWhen: shares.map((name) => `${name} >= 0`),
     bounds: record(shares, positive),
     equilibria: [],
     closedForms: [],
@@ -112,7 +112,7 @@ function perishable(life: number, issue: "oldest-first" | "newest-first"): Catal
       q: inStateUnit("received at the end of the period"),
       d: inStateUnit("demand of the period"),
     },
-    holds: all.map((k) => `a${k}0 >= 0`),
+    validWhen: all.map((k) => `a${k}0 >= 0`),
     bounds: record(
       all.map((k) => `a${k}`),
       positive,
