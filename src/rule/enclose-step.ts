@@ -2,7 +2,7 @@ import type { Algebra } from "./graph/evaluate-over.js";
 import { type Interval, minus, plus, times, wholeLine } from "./graph/interval.js";
 import type { Operator } from "./graph/node.js";
 import type { Rule } from "./rule.js";
-import { intervalAlgebra, type PlaceOver, stepOver } from "./step-over.js";
+import { intervalAlgebra, type StepArgumentsOver, stepOver } from "./step-over.js";
 
 /** Bounds on one step and its slope over a whole interval of the present value. */
 export interface StepEnclosure {
@@ -11,7 +11,7 @@ export interface StepEnclosure {
 }
 
 /** Parameters and inputs by slot, inputs held at one value. */
-export interface HeldValues {
+export interface FixedValues {
   readonly parameters: Float64Array;
   readonly inputs: Float64Array;
 }
@@ -46,7 +46,7 @@ const intersection = (a: Interval, b: Interval): Interval => [Math.max(a[0], b[0
  * every slope within `slope`, which is without bounds where the value may jump. The value is bounded both directly
  * and from the middle by the slope, which is closer on short intervals.
  */
-export function encloseStep(rule: Rule, held: HeldValues): (present: Interval) => StepEnclosure {
+export function encloseStep(rule: Rule, held: FixedValues): (present: Interval) => StepEnclosure {
   let jumps = false;
   const step = stepOver(
     rule,
@@ -57,7 +57,7 @@ export function encloseStep(rule: Rule, held: HeldValues): (present: Interval) =
   const width = 1 + rule.lags.length;
   const parameters = Array.from(held.parameters, exactly);
   const inputs = Array.from(held.inputs, exactly);
-  const placeOf = (present: Interval): PlaceOver<Interval> => ({
+  const placeOf = (present: Interval): StepArgumentsOver<Interval> => ({
     state: new Array<Interval>(width).fill(present),
     parameters,
     input: (slot) => inputs[slot]!,

@@ -11,7 +11,7 @@ export interface StepFailure extends Span {
 }
 
 /** Where the step stands: arrays in the rule's order, the state vector with its kept past values. */
-export interface StepPlace {
+export interface StepArguments {
   readonly state: Float64Array;
   readonly parameters: Float64Array;
   readonly inputs: readonly Float64Array[];
@@ -108,7 +108,7 @@ function valueAt(at: Expression, valueOfName: ValueOfName): number {
   }
 }
 
-function valuesAt(rule: Rule, place: StepPlace, quantities: ReadonlyMap<string, number>): ValueOfName {
+function valuesAt(rule: Rule, place: StepArguments, quantities: ReadonlyMap<string, number>): ValueOfName {
   return (name, offset) => {
     if (name === "t") return place.t;
     const input = rule.inputs.indexOf(name);
@@ -122,7 +122,7 @@ function valuesAt(rule: Rule, place: StepPlace, quantities: ReadonlyMap<string, 
 }
 
 /** Finds why a step from a place has no finite value; undefined when it has one. */
-export function explainFailure(rule: Rule, place: StepPlace): StepFailure | undefined {
+export function explainFailure(rule: Rule, place: StepArguments): StepFailure | undefined {
   const quantities = new Map<string, number>();
   const valueOfName = valuesAt(rule, place, quantities);
   try {

@@ -8,7 +8,7 @@ import type { Rule } from "./rule.js";
 import { ruleDefinition } from "./rule-definition.js";
 
 /** Values that a step reads, in some algebra; each role by slot. */
-export interface PlaceOver<T> {
+export interface StepArgumentsOver<T> {
   readonly state: readonly T[];
   readonly parameters: readonly T[];
   /** Value of an input some periods from t. */
@@ -19,9 +19,9 @@ export interface PlaceOver<T> {
 /** Steps of a rule in another algebra. */
 export interface StepOver<T> {
   /** The next state vector. */
-  readonly next: (place: PlaceOver<T>) => readonly T[];
+  readonly next: (place: StepArgumentsOver<T>) => readonly T[];
   /** Its slopes [slot][slot] by the present one. */
-  readonly slopes: (place: PlaceOver<T>) => readonly (readonly T[])[];
+  readonly slopes: (place: StepArgumentsOver<T>) => readonly (readonly T[])[];
 }
 
 /** Makes a rule ready to be stepped in another algebra. */
@@ -31,7 +31,7 @@ export function stepOver<T>(rule: Rule, algebra: Algebra<T>): StepOver<T> {
   const next = evaluatorOver(graph.next, algebra);
   const slopes = evaluatorOver(stepJacobian(graph).byState.flat(), algebra);
   const leafAt =
-    (place: PlaceOver<T>) =>
+    (place: StepArgumentsOver<T>) =>
     (leaf: Extract<Node, { kind: "leaf" }>): T => {
       if (leaf.role === "state") return place.state[leaf.slot]!;
       if (leaf.role === "parameter") return place.parameters[leaf.slot]!;
