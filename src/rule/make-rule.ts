@@ -1,11 +1,11 @@
 import type { Warning } from "../numeric/index.js";
 import type { NamedRule } from "./catalogue/named-rule.js";
 import { checkOptions } from "./check/check-options.js";
-import type { Declared } from "./check/checked-rule.js";
-import { memoryOf } from "./graph/build-graph.js";
+import type { Declarations } from "./check/checked-rule.js";
+import { laggedStates } from "./graph/build-graph.js";
 import type { RecurrenceOptions } from "./recurrence-options.js";
 import type { Rule } from "./rule.js";
-import { defineRule, keepDefinition } from "./rule-definition.js";
+import { defineRule, storeDefinition } from "./rule-definition.js";
 import { unitFindings } from "./units/unit-findings.js";
 
 function copyOf<T>(given: Readonly<Record<string, T>> | undefined): Readonly<Record<string, T>> {
@@ -21,7 +21,7 @@ function copyOf<T>(given: Readonly<Record<string, T>> | undefined): Readonly<Rec
 /** Reads, checks and keeps a rule; `named` is what the catalogue knows of it. */
 export function makeRule(text: string, options: RecurrenceOptions, named?: NamedRule): Rule {
   const normal = text.normalize("NFC").replace(/\r\n?/gu, "\n");
-  const declared: Declared = { parameters: options.parameters, inputs: options.inputs ?? [] };
+  const declared: Declarations = { parameters: options.parameters, inputs: options.inputs ?? [] };
   const definition = defineRule(normal, declared);
   const { checked } = definition;
   checkOptions(checked, options);
@@ -35,7 +35,7 @@ export function makeRule(text: string, options: RecurrenceOptions, named?: Named
     text: normal,
     form: first.kind === "change" ? "change" : "next",
     states: Object.freeze([...checked.states]),
-    memory: Object.freeze(memoryOf(checked).map((kept) => Object.freeze(kept))),
+    lags: Object.freeze(laggedStates(checked).map((kept) => Object.freeze(kept))),
     quantities: Object.freeze([...checked.quantities]),
     inputs: Object.freeze([...checked.inputs]),
     parameters: Object.freeze([...checked.parameters]),
@@ -48,6 +48,6 @@ export function makeRule(text: string, options: RecurrenceOptions, named?: Named
     findings,
     ...(named === undefined ? {} : { named }),
   });
-  keepDefinition(rule, definition);
+  storeDefinition(rule, definition);
   return rule;
 }

@@ -1,4 +1,10 @@
-import { compileRule, explainFailure, quantitiesAt, type Rule, type StepPlace } from "../../rule/index.js";
+import {
+  compileRule,
+  explainFailure,
+  quantitiesAt,
+  type Rule,
+  type StepArguments,
+} from "../../rule/index.js";
 import { unreadableOption } from "../refusals.js";
 import { type InputValues, inputColumns } from "../setting/input-columns.js";
 import { type InitialValues, initialVector, parametersBySlot } from "../setting/setting.js";
@@ -50,7 +56,7 @@ interface Run {
   readonly table: Float64Array;
 }
 
-function placeAt(run: Run, row: number): StepPlace {
+function placeAt(run: Run, row: number): StepArguments {
   const state = run.table.subarray(row * run.width, (row + 1) * run.width);
   return { state, parameters: run.parameters, inputs: run.inputs, t: run.from + row };
 }
