@@ -127,24 +127,24 @@ function assemble(
   const decisions = log.decisions();
   const corrected = new Set(decisions.map(({ row }) => row)).size;
   const settled = corrected - new Set(corrections.map(({ row }) => row)).size;
-  return Object.freeze({
+  return {
     kind: "observations",
-    groups: Object.freeze(groups),
-    ...(options.by !== undefined && { by: Object.freeze([options.by].flat()) }),
-    states: Object.freeze(states.map((state) => Object.freeze(state))),
-    inputs: Object.freeze(inputsOf(options).map(([input]) => input)),
-    period: Object.freeze({ column: axis.column, unit: step.of, step, ...(name && { calendar: name }) }),
+    groups,
+    ...(options.by !== undefined && { by: [options.by].flat() }),
+    states,
+    inputs: inputsOf(options).map(([input]) => input),
+    period: { column: axis.column, unit: step.of, step, ...(name && { calendar: name }) },
     measured: options.measured ?? "level",
     order: options.order ?? "",
     findings: log.all(),
     ...(decisions.length > 0 && { decisions }),
-    counts: Object.freeze({
+    counts: {
       read,
       used,
       flagged: log.flagged(),
       corrected,
       ...(settled > 0 && { settled }),
       refused: read - used,
-    }),
-  });
+    },
+  };
 }

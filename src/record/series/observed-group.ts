@@ -44,11 +44,11 @@ export function observedGroup(
     ...censoringOf(columns, merged),
     ...(merged.spread && { replicates: byState(columns, (state) => merged.spread!(columns.values[state]!)) }),
   };
-  return { group: Object.freeze(group), used: merged.used };
+  return { group, used: merged.used };
 }
 
 function byState<T>(columns: ReadColumns, of: (state: number) => T): Readonly<Record<string, T>> {
-  return Object.freeze(Object.fromEntries(columns.states.map(({ name }, state) => [name, of(state)])));
+  return Object.fromEntries(columns.states.map(({ name }, state) => [name, of(state)]));
 }
 
 function censoringOf(
@@ -59,5 +59,5 @@ function censoringOf(
     const side = columns.censoring[state];
     return side?.some((value) => value !== 0) ? [[name, merged.carrySide(side)] as const] : [];
   });
-  return sides.length === 0 ? {} : { censoring: Object.freeze(Object.fromEntries(sides)) };
+  return sides.length === 0 ? {} : { censoring: Object.fromEntries(sides) };
 }
