@@ -1,4 +1,4 @@
-import { type ColumnTable, columnNamed, rowCount } from "../column-table.js";
+import { type ColumnTable, columnNamed, rowCount, withPlainNames } from "../column-table.js";
 import type { Decision } from "./decision.js";
 import { noDecision, noSuchRow, reasonMissing } from "./refusals.js";
 
@@ -45,8 +45,9 @@ export function undo(table: ColumnTable, row?: number): ColumnTable {
   return left.length === 0 ? rest : { ...rest, decisions: left };
 }
 
-/** The columns as they are used: with every correction of a cell put in. */
-export function decided(table: ColumnTable): ColumnTable {
+/** The columns as they are used: with plain names, and with every correction of a cell put in. */
+export function decided(record: ColumnTable): ColumnTable {
+  const table = withPlainNames(record);
   const changes = (table.decisions ?? []).filter(({ column }) => column !== "");
   if (changes.length === 0) return table;
   const columns = [...table.columns];
