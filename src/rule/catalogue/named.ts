@@ -1,3 +1,4 @@
+import { freezeDeep } from "../../numeric/index.js";
 import { makeRule } from "../make-rule.js";
 import type { RecurrenceOptions } from "../recurrence-options.js";
 import type { Rule } from "../rule.js";
@@ -19,11 +20,6 @@ function unitsFrom(entry: CatalogueEntry, given: Readonly<Record<string, string>
   return { ...Object.fromEntries(derived), ...given };
 }
 
-const freeze = <T>(value: T): T => {
-  if (typeof value === "object" && value !== null) Object.values(value).forEach(freeze);
-  return Object.freeze(value);
-};
-
 /** Makes the rule of a catalogue entry; what is given prevails over what the entry says. */
 export function named(entry: CatalogueEntry, options: NamedRuleOptions = {}): Rule {
   const { text, inputs = [], bounds = {}, start = {}, ...about } = entry;
@@ -37,5 +33,5 @@ export function named(entry: CatalogueEntry, options: NamedRuleOptions = {}): Ru
     bounds: { ...free(bounds), ...options.bounds },
     start: { ...free(start), ...options.start },
   };
-  return makeRule(text, full, freeze(about));
+  return makeRule(text, full, freezeDeep(about));
 }
