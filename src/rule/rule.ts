@@ -13,6 +13,8 @@ export interface ProcessNoise {
 /** A recurrence: text that was read, checked, and made ready to be run, differentiated and printed. */
 export interface Rule {
   readonly kind: "rule";
+  /** What it is called in titles, tables and sentences; absent where neither the options nor the catalogue say. */
+  readonly name?: string;
   /** The text as given, normalised (NFC), comments kept. */
   readonly text: string;
   /** How the first state is stated: `X[t+1] = ...` or `ΔX = ...`. */

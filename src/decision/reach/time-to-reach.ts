@@ -26,19 +26,19 @@ export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOp
   const smooth = rule.inputs.length === 0 && isSmooth(rule);
   const groups = ahead.groups.map((group) => {
     const answer = groupReach(ahead, group, question, smooth);
-    return Object.freeze({ ...answer, sentence: groupSentence(ahead, answer, question) });
+    return { ...answer, sentence: groupSentence(ahead, answer, question) };
   });
   const asked = options.newUnit === true && ahead.kind === "forecast";
   if (asked && groups.length < 3) throw refuseFewUnits(groups.length);
   const across = asked ? acrossUnits(groups, question.level) : undefined;
   const sentence = reachSentence(ahead, groups, across, question);
-  return Object.freeze({
+  return {
     kind: "time-to-reach",
     ...question,
-    groups: Object.freeze(groups),
+    groups,
     across,
     sentence,
-  });
+  };
 }
 
 function ruleOf(ahead: Forecast | Simulation): Rule {

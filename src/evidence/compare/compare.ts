@@ -63,16 +63,16 @@ export function compare(fits: readonly Fit[], options: CompareOptions = {}): Com
   const rolled = rollingOrigin(fits, planOf(first, options));
   const { verdict, standing, sentence } = comparisonVerdict(fits, rows, rolled);
   const decisions = decisionsOf(fits, standing, options.decide);
-  return Object.freeze({
+  return {
     kind: "comparison",
-    rows: Object.freeze(rows),
-    likelihoodRatios: Object.freeze(likelihoodRatios(fits)),
+    rows,
+    likelihoodRatios: likelihoodRatios(fits),
     rollingOrigin: rolled,
     verdict,
-    decisions: Object.freeze(decisions),
+    decisions,
     sentence: [sentence, ...decisionText(verdict, decisions)].join(" "),
-    notes: Object.freeze(notesOf(fits, scalesDiffer, rolled)),
-  });
+    notes: notesOf(fits, scalesDiffer, rolled),
+  };
 }
 
 function planOf(
