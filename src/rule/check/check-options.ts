@@ -97,8 +97,7 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
 
 /** Refuses options that speak of names the rule has not, or give values that fit no meaning. */
 export function checkOptions(rule: CheckedRule, options: RecurrenceOptions): void {
-  const { name } = options;
-  if (name !== undefined && (typeof name !== "string" || name.trim() === "")) throw nameOptionError(name);
+  checkName(options.name);
   for (const { option, what, names, expected, accepts } of checks(rule)) {
     for (const [name, value] of Object.entries(options[option] ?? {})) {
       if (!names.includes(name)) throw unknownOptionNameError(option, name, names, what);
@@ -106,4 +105,9 @@ export function checkOptions(rule: CheckedRule, options: RecurrenceOptions): voi
       if (!accepts(value as never, name)) throw optionValueError(option, name, expected(name), value);
     }
   }
+}
+
+function checkName(name: unknown): void {
+  if (name === undefined || (typeof name === "string" && name.trim() !== "")) return;
+  throw nameOptionError(name);
 }
