@@ -17,7 +17,7 @@ export { recurrence } from "./recurrence.js";
 export type { RecurrenceOptions } from "./recurrence-options.js";
 export { type Roughness, type RoughPlace, roughness } from "./roughness.js";
 export type { ProcessNoise, Rule } from "./rule.js";
-export { ruleLabel, ruleLabelWithText } from "./rule-label.js";
+export { ruleLabel, ruleLines } from "./rule-label.js";
 export { type RuleLanguage, ruleLanguage } from "./rule-language.js";
 export { ruleText } from "./rule-text.js";
 export { intervalAlgebra, isLinearInStates, type PlaceOver, type StepOver, stepOver } from "./step-over.js";

@@ -21,10 +21,12 @@ function refuseValue(option: string, name: string, wanted: string, given: unknow
   );
 }
 
-function refuseLabel(given: unknown): ModelError {
-  return new ModelError(
+function checkName(name: unknown): void {
+  if (name === undefined || (typeof name === "string" && name.trim() !== "")) return;
+  const given = JSON.stringify(name) ?? String(name);
+  throw new ModelError(
     "unreadable-option",
-    `Option \`name\` must be a text; ${JSON.stringify(given) ?? String(given)} was given. Write \`name: "crowding"\`.`,
+    `Option \`name\` must be a text; ${given} was given. Write \`name: "crowding"\`.`,
     { option: "name", given },
   );
 }
@@ -92,8 +94,7 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
 
 /** Refuses options that speak of names the rule has not, or give values that fit no meaning. */
 export function checkOptions(rule: CheckedRule, options: RecurrenceOptions): void {
-  const { name } = options;
-  if (name !== undefined && (typeof name !== "string" || name.trim() === "")) throw refuseLabel(name);
+  checkName(options.name);
   for (const { option, what, names, wanted, fits } of checks(rule)) {
     for (const [name, value] of Object.entries(options[option] ?? {})) {
       if (!names.includes(name)) throw refuseName(option, name, names, what);
