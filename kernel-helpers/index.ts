@@ -32,6 +32,7 @@ export type {
   ExactTrajectory,
   ExactTrajectoryOptions,
   HeldSetting,
+  InputPlan,
   LyapunovExponent,
   LyapunovExponentOptions,
   MatrixGrowth,
@@ -71,7 +72,6 @@ export { leastSquares, ModelError } from "../src/numeric/index.js";
 export type {
   Forecast,
   ForecastOptions,
-  InputPlan,
   SimulateOptions,
   Simulation,
 } from "../src/projection/index.js";
