@@ -33,6 +33,7 @@ export {
 } from "./period/period-axis.js";
 export { calendarAxis, numberAxis } from "./period/stated-axis.js";
 export { inputByPeriod } from "./series/input-by-period.js";
+export { joined } from "./series/joined.js";
 export { tableOfRows } from "./table-of-rows.js";
 export { type FillOptions, filled } from "./tables/filled.js";
 export type { PeriodsOf } from "./tables/placed-series.js";
