@@ -102,14 +102,14 @@ export function simulate(rule: Rule, options: SimulateOptions): Simulation {
     const ground = { rule, compiled, parameters, initial, inputs, from, periods };
     return simulated(ground, start, { name, plans }, { ...options, ...settings }, change);
   });
-  return Object.freeze({
+  return {
     kind: "simulation",
     rule,
-    parameters: Object.freeze(Object.fromEntries(rule.parameters.map((name, i) => [name, parameters[i]!]))),
+    parameters: Object.fromEntries(rule.parameters.map((name, i) => [name, parameters[i]!])),
     axis,
-    options: Object.freeze(settings),
-    groups: Object.freeze(groups),
-  });
+    options: settings,
+    groups,
+  };
 }
 
 type Settled = Omit<SimulateOptions, "period"> &

@@ -1,5 +1,5 @@
 import { labelAt, type PeriodAxis } from "../../record/index.js";
-import { inputReach, type Rule } from "../../rule/index.js";
+import { inputOffsets, type Rule } from "../../rule/index.js";
 import { earlierInputMissing, futureInputMissing, unknownInput } from "../refusals.js";
 import { type InputPlan, type InputPlans, plannedValues } from "./input-plan.js";
 
@@ -32,7 +32,7 @@ export const nothingRecorded = (): Float64Array => noInput;
 export function plannedInputs(rule: Rule, plans: InputPlans, known: KnownInputs): readonly Float64Array[] {
   for (const name of Object.keys(plans))
     if (!rule.inputs.includes(name)) throw unknownInput(name, rule.inputs);
-  const reach = inputReach(rule);
+  const reach = inputOffsets(rule);
   const needed = (slot: number): number => Math.max(0, known.last + reach[slot]![1] - known.first);
   const columns = rule.inputs.map((name, slot) => columnOf(name, plans[name], needed(slot), known));
   const missing = rule.inputs.filter((_, slot) => columns[slot] === undefined);
@@ -51,7 +51,7 @@ function checked(
   columns: readonly Float64Array[],
   { axis, from, first, last }: KnownInputs,
 ): readonly Float64Array[] {
-  inputReach(rule).forEach(([earliest, latest], slot) => {
+  inputOffsets(rule).forEach(([earliest, latest], slot) => {
     const end = Math.min(first, last + latest);
     for (let index = from + earliest; index < end; index++)
       if (!Number.isFinite(columns[slot]![index]))

@@ -80,7 +80,7 @@ export function initialFrom(
 ): InitialValues {
   if (recorded === undefined) return given;
   const known = rule.states.flatMap((state): [string, number[]][] => {
-    const lags = rule.memory.filter((kept) => kept.state === state).length;
+    const lags = rule.lags.filter((kept) => kept.state === state).length;
     const places = Array.from({ length: lags + 1 }, (_, i) => recorded.index.indexOf(from - lags + i));
     const values = recorded.values[state];
     return values === undefined || places.includes(-1) ? [] : [[state, places.map((at) => values[at]!)]];

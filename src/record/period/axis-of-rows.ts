@@ -24,7 +24,7 @@ export function axisOfRows(placed: PlacedRows, indexed: IndexedRows): PeriodAxis
       : calendar.months === undefined
         ? momentsOf(placed, moments, indexed)
         : monthsOf(placed, moments, calendar.months, indexed);
-  return Object.freeze({ ...common, ...own });
+  return { ...common, ...own };
 }
 
 type Counted = Pick<PeriodAxis, "form" | "counts" | "origin" | "stride" | "day" | "clock">;
