@@ -108,8 +108,3 @@ export function checkOptions(rule: CheckedRule, options: RecurrenceOptions): voi
     }
   }
 }
-
-function checkName(name: unknown): void {
-  if (name === undefined || (typeof name === "string" && name.trim() !== "")) return;
-  throw nameOptionError(name);
-}
