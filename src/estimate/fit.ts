@@ -57,17 +57,17 @@ export function fit(rule: Rule, observations: Observations, options: FitOptions)
   checkOptions(rule, options);
   const matched = matchStates(rule, observations);
   const { groups, criteria, population } = fitGroups(rule, matched.groups, options);
-  const fitted: Fit = Object.freeze({
+  const fitted: Fit = {
     kind: "fit",
     rule,
     observations: matched,
-    options: Object.freeze({ ...options }),
-    groups: Object.freeze(groups),
-    criteria: Object.freeze(criteria),
-    ...(population && { population: Object.freeze(population) }),
-    warnings: Object.freeze([...rule.findings, ...inputWarnings(rule, matched, options)]),
-    conventions: Object.freeze(conventionsOf(options, groups)),
-  });
+    options: { ...options },
+    groups,
+    criteria,
+    ...(population && { population }),
+    warnings: [...rule.findings, ...inputWarnings(rule, matched, options)],
+    conventions: conventionsOf(options, groups),
+  };
   problems.set(fitted, fitProblem(fitted, fit));
   return fitted;
 }

@@ -27,6 +27,7 @@ export {
   type EstimateRow,
   estimates,
   freeUnknowns,
+  type PointRow,
   points,
   type SummaryRow,
   summary,

@@ -1,6 +1,7 @@
 export { choleskyFactor, choleskyInverse, choleskySolve } from "./algebra/cholesky.js";
 export { covarianceFromTriangle, type UnscaledCovariance } from "./algebra/covariance-from-triangle.js";
 export { rotateRowIn } from "./algebra/rotate-row-in.js";
+export { freezeDeep, frozenCopy } from "./freeze-deep.js";
 export {
   type LeastSquaresProblem,
   type LeastSquaresSolution,

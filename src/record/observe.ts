@@ -128,23 +128,24 @@ function assemble(
   const corrected = new Set(decisions.map(({ row }) => row)).size;
   const settled = corrected - new Set(corrections.map(({ row }) => row)).size;
   const flows = columns.inputs.filter(({ measured }) => measured === "flow").map(({ name }) => name);
-  return Object.freeze({
+  return {
     kind: "observations",
-    groups: Object.freeze(groups),
-    ...(options.by !== undefined && { by: Object.freeze([options.by].flat()) }),
-    states: Object.freeze(
-      columns.states.map(({ name, column, unit, measured = "level" }) =>
-        Object.freeze({ name, column, unit, measured }),
-      ),
-    ),
-    inputs: Object.freeze(columns.inputs.map(({ name }) => name)),
-    ...(flows.length > 0 && { flows: Object.freeze(flows) }),
+    groups,
+    ...(options.by !== undefined && { by: [options.by].flat() }),
+    states: columns.states.map(({ name, column, unit, measured = "level" }) => ({
+      name,
+      column,
+      unit,
+      measured,
+    })),
+    inputs: columns.inputs.map(({ name }) => name),
+    ...(flows.length > 0 && { flows }),
     axis: axisOfRecord(groups, periods),
-    period: Object.freeze({ column: periods.column, unit: step.of, step, ...(name && { calendar: name }) }),
+    period: { column: periods.column, unit: step.of, step, ...(name && { calendar: name }) },
     order: options.order ?? "",
     findings: log.all(),
     ...(decisions.length > 0 && { decisions }),
-    counts: Object.freeze({
+    counts: {
       ...(aside > 0 && { aside }),
       read,
       used,
@@ -152,8 +153,8 @@ function assemble(
       corrected,
       ...(settled > 0 && { settled }),
       refused: read - used,
-    }),
-  });
+    },
+  };
 }
 
 /** The axis of all rows, whose period 0 is the earliest of them. */

@@ -1,5 +1,6 @@
+import type { InputPlan } from "../../dynamics/index.js";
 import { problemOf } from "../../estimate/index.js";
-import type { Ground, InputPlan } from "../../projection/index.js";
+import type { Ground } from "../../projection/index.js";
 import { type Standing, stateOf } from "./standing.js";
 
 /** Something that can be set: a parameter, a first value "N[0]", or the usual level of an input. */

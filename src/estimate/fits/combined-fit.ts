@@ -47,7 +47,7 @@ export function combinedFit(rule: Rule, groups: readonly ObservedGroup[], option
     groups: groups.map((group, g) => {
       const searched = { group, unknowns: own[g]!, rows: parts[g]!.rows };
       const part = describeFit(rule, searched, options, partOf(found, maps[g]!, rows.size), measures);
-      return Object.freeze({ ...part, degreesOfFreedom: left });
+      return { ...part, degreesOfFreedom: left };
     }),
   };
 }

@@ -8,7 +8,7 @@ import type { Scale } from "./scale.js";
 
 /** Where the trajectory that leads into the future begins. */
 export interface Beginning {
-  /** Its period: that of the fitted start, or the last one recorded. */
+  /** Its period: that of the fitted start, or the one that the future starts after. */
   readonly period: number;
   /** Whether it begins at a fitted or given start and runs through the record. */
   readonly fromStart: boolean;
@@ -20,16 +20,20 @@ export interface Beginning {
   readonly belief?: { readonly mean: Float64Array; readonly covariance: Float64Array; readonly scale: Scale };
 }
 
-/** A trajectory fit goes on from its own start, a chain of steps from the last recorded value, a filter from what it holds. */
+/**
+ * A trajectory fit goes on from its own start, a chain of steps from the last recorded value, a filter from what it holds.
+ *
+ * @param after - the period that the future starts after.
+ */
 export function beginningOf(
   rule: Rule,
   recorded: ObservedGroup,
   fitted: GroupFit,
   options: FitOptions,
   scale: Scale,
+  after: number,
 ): Beginning {
   const fromStart = options.errors === "observation";
-  const recordEnd = recorded.index[recorded.index.length - 1]!;
   const reach = longestLag(rule);
   const slots = slotsOf(rule);
   const last = fitted.filter?.last;
@@ -42,13 +46,13 @@ export function beginningOf(
   const initial = Float64Array.from(slots, ({ state, lag, name }, s) => {
     if (belief !== undefined) return scale.from(belief.mean[s]!);
     if (fromStart) return fitted.estimates.find((each) => each.name === name)?.value ?? given[s]!;
-    return recorded.values[state]![recorded.index.indexOf(recordEnd - lag)] ?? Number.NaN;
+    return recorded.values[state]![recorded.index.indexOf(after - lag)] ?? Number.NaN;
   });
   const places = Int32Array.from(fitted.estimates, ({ name, role }) => {
     if (role === "parameter") return rule.parameters.indexOf(name);
     const slot = slots.findIndex((each) => each.name === name);
     return slot < 0 || !fromStart ? -1 : rule.parameters.length + slot;
   });
-  const period = fromStart ? reach : recordEnd;
+  const period = fromStart ? reach : after;
   return { period, fromStart, initial, places, ...(belief && { belief }) };
 }

@@ -3,6 +3,7 @@ import type { Rule } from "../../rule/index.js";
 import type { Fit } from "../fit.js";
 import type { ErrorDistribution, ErrorKind, FitOptions } from "../options/fit-options.js";
 import { type Around, aroundOf } from "./around.js";
+import { aspectsOf, type FitAspects } from "./aspects.js";
 import { errorFamily } from "./error-family.js";
 import { type GroupProblem, groupProblem } from "./group-problem.js";
 import { type Scale, scaleOf } from "./scale.js";
@@ -34,6 +35,8 @@ export interface FitProblem {
   readonly level: number;
   /** States that the record reads only up to an unknown factor. */
   readonly readByFactor: readonly string[];
+  /** What the fit was made with, in words. */
+  readonly aspects: FitAspects;
   /** Lowest and highest admitted value of a parameter or initial state. */
   readonly bounds: (name: string) => readonly [number, number];
   /** What its values come to around other centres; of a filter as if its predictions had one variance. */
@@ -68,6 +71,7 @@ export function fitProblem(
     level: options.level ?? 0.95,
     around: aroundOf(errorFamily(options), scaleOf(options)),
     readByFactor: Object.keys(options.factor ?? {}),
+    aspects: aspectsOf(rule, options),
     bounds: (name) => options.bounds?.[name] ?? rule.bounds[name] ?? open,
     group(name) {
       const known = made.get(name);

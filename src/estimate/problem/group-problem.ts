@@ -25,7 +25,8 @@ export interface GroupProblem {
   readonly noise: FittedNoise;
   /** Whether its scatter was found as the sigma of residuals, whose own uncertainty n - p tells. */
   readonly findsSigma: boolean;
-  readonly beginning: Beginning;
+  /** Where the trajectory begins that leads on after a period; by default after the last one recorded. */
+  readonly beginning: (after?: number) => Beginning;
   /** The residuals that the error distribution calls for when they are tested: `raw`, or `quantile` of counts and limits. */
   readonly tested: ResidualKind;
   readonly residuals: (kind: ResidualKind, stream: RandomStream) => Float64Array;
@@ -67,7 +68,8 @@ export function groupProblem(
     },
     noise: fittedNoise(rule, recorded, fitted, options),
     findsSigma: kind !== "state-space" && !counts && options.sd === undefined,
-    beginning: beginningOf(rule, recorded, fitted, options, scaleOf(options)),
+    beginning: (after = recorded.index[recorded.index.length - 1]!) =>
+      beginningOf(rule, recorded, fitted, options, scaleOf(options), after),
     tested: kind === "likelihood" ? "quantile" : "raw",
     residuals(wanted, stream) {
       if (together) return Float64Array.from(fitted.points, ({ residual }) => residual);

@@ -71,7 +71,7 @@ export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
     return rowsOf(fitted, refits, options.level ?? problem.level);
   });
   const failed = fit.groups.length * resamples - used;
-  return Object.freeze({ kind: "bootstrap", errors, seed, rows: Object.freeze(rows), used, failed });
+  return { kind: "bootstrap", errors, seed, rows, used, failed };
 }
 
 /** The estimates of the refits, as reported. */

@@ -53,8 +53,7 @@ export function describeFit(
     })),
   };
   const own = searched.warnings?.(found.at) ?? [];
-  const warnings = [...fitWarnings(fitted, { rule, options, unknowns, found }), ...own];
-  return Object.freeze({ ...fitted, warnings });
+  return { ...fitted, warnings: [...fitWarnings(fitted, { rule, options, unknowns, found }), ...own] };
 }
 
 /** Values of the states where the path begins: estimated or given ones, or the first recorded ones. */

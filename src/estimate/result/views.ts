@@ -1,3 +1,4 @@
+import { ruleLabel } from "../../rule/index.js";
 import type { Fit } from "../fit.js";
 import type { Criteria } from "./criteria.js";
 import type { Estimate } from "./estimate-of.js";
@@ -16,8 +17,13 @@ export function estimates(fit: Fit): readonly EstimateRow[] {
   );
 }
 
+/** A row of the points view: one compared value of one group. */
+export interface PointRow extends FitPoint {
+  readonly group: string;
+}
+
 /** Every residual of every group of a fit. */
-export function points(fit: Fit): readonly (FitPoint & { readonly group: string })[] {
+export function points(fit: Fit): readonly PointRow[] {
   return fit.groups.flatMap((group) => group.points.map((point) => ({ group: group.group, ...point })));
 }
 
@@ -49,7 +55,7 @@ export function summary(fit: Fit): readonly SummaryRow[] {
 function rowOf(fit: Fit, group: GroupFit, criteria: Criteria, parameters: number): SummaryRow {
   return {
     group: group.group,
-    rule: fit.rule.text,
+    rule: ruleLabel(fit.rule),
     count: criteria.count,
     parameters,
     sumOfSquares: group.sumOfSquares,

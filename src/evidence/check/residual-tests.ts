@@ -41,7 +41,7 @@ function testsOfState(fit: Fit, group: GroupFit, state: string): ResidualTest[] 
   const series = residualSeries(group, state);
   const lags = Math.max(1, Math.min(10, Math.floor(residuals.length / 5)));
   const { errors, scale } = problemOf(fit);
-  const fitted = errors === "process" ? 1 + fit.rule.memory.length : 0;
+  const fitted = errors === "process" ? 1 + fit.rule.lags.length : 0;
   const levels = points.map((point) => scale.to(point.fitted));
   const improved = ljungBox(series, lags, fitted);
   const plain = boxPierce(series, lags, fitted);

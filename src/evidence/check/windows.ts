@@ -24,6 +24,7 @@ const shares = [0.2, 0.4];
  */
 export function windows(fit: Fit, group: GroupFit): readonly Window[] {
   const { refitter, recorded, beginning } = problemOf(fit).group(group.group);
+  const steps = !beginning().fromStart;
   const again = refitter();
   if (again?.minimisePart === undefined) return [];
   const { time } = recorded;
@@ -39,7 +40,7 @@ export function windows(fit: Fit, group: GroupFit): readonly Window[] {
   return parts.flatMap(([name, from, to]) => {
     if (seen.has(`${from} ${to}`)) return [];
     seen.add(`${from} ${to}`);
-    const [first, end] = comparedIn(again, from, to, !beginning.fromStart);
+    const [first, end] = comparedIn(again, from, to, steps);
     if (end - first < again.at.length + 3) return [];
     const found = again.minimisePart!(again.at, first, end);
     if (found.stop.kind === "failed") return [];

@@ -4,6 +4,7 @@ import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseOneFit, refuseUnlikeErrors, refuseUnlikeRecords, refuseUnlikeStarts } from "../refusals.js";
 import { type ComparisonRow, comparisonRows } from "./comparison-row.js";
 import { type ComparisonVerdict, comparisonVerdict } from "./comparison-verdict.js";
+import { fitLabels } from "./fit-labels.js";
 import { type LikelihoodRatio, likelihoodRatios } from "./likelihood-ratio.js";
 
 /** Options of `compare`. */
@@ -20,6 +21,7 @@ export interface CompareOptions {
 
 /** What one rival leads to. */
 export interface RivalDecision {
+  /** What the comparison calls the rival. */
   readonly rule: string;
   readonly decision: string;
 }
@@ -59,20 +61,21 @@ export function compare(fits: readonly Fit[], options: CompareOptions = {}): Com
   for (const other of fits.slice(1)) refuseUnlike(first, other);
   for (const fit of fits) refuseExact(fit);
   const scalesDiffer = new Set(fits.map((fit) => problemOf(fit).scale.log)).size > 1;
-  const rows = comparisonRows(fits, scalesDiffer);
+  const labels = fitLabels(fits);
+  const rows = comparisonRows(fits, labels, scalesDiffer);
   const rolled = rollingOrigin(fits, planOf(first, options));
   const { verdict, standing, sentence } = comparisonVerdict(fits, rows, rolled);
   const decisions = decisionsOf(fits, standing, options.decide);
-  return Object.freeze({
+  return {
     kind: "comparison",
-    rows: Object.freeze(rows),
-    likelihoodRatios: Object.freeze(likelihoodRatios(fits)),
+    rows,
+    likelihoodRatios: likelihoodRatios(fits, labels),
     rollingOrigin: rolled,
     verdict,
-    decisions: Object.freeze(decisions),
+    decisions,
     sentence: [sentence, ...decisionText(verdict, decisions)].join(" "),
-    notes: Object.freeze(notesOf(fits, scalesDiffer, rolled)),
-  });
+    notes: notesOf(fits, scalesDiffer, rolled),
+  };
 }
 
 function planOf(
@@ -90,7 +93,7 @@ function planOf(
 
 function refuseUnlike(first: Fit, other: Fit): void {
   if (problemOf(first).errors !== problemOf(other).errors) throw refuseUnlikeErrors();
-  const lags = first.rule.memory.length - other.rule.memory.length;
+  const lags = first.rule.lags.length - other.rule.lags.length;
   if (
     problemOf(first).errors === "process" &&
     lags !== 0 &&
@@ -106,7 +109,10 @@ function refuseUnlike(first: Fit, other: Fit): void {
         group.points.every((point, i) => point.observed === twin.points[i]!.observed)
       );
     });
-  if (!same) throw refuseUnlikeRecords(first.rule.text, other.rule.text);
+  if (!same) {
+    const [one, two] = fitLabels([first, other]);
+    throw refuseUnlikeRecords(one!, two!);
+  }
 }
 
 function decisionsOf(

@@ -1,5 +1,5 @@
 import { type Fit, type FittedScatter, type GroupFit, problemOf } from "../../estimate/index.js";
-import type { ObservedGroup } from "../../record/index.js";
+import { inputByPeriod, type ObservedGroup } from "../../record/index.js";
 import { compileRule, type Rule } from "../../rule/index.js";
 import { carryVariance, spreadOf } from "./carry-variance.js";
 
@@ -27,10 +27,11 @@ export function predictAhead(
 ): readonly (readonly Prediction[])[] | undefined {
   const { rule } = fit;
   const { scale, readByFactor, group: problemOfGroup } = problemOf(fit);
-  const { kind, unknowns, beginning, noise } = problemOfGroup(group.group);
+  const { kind, unknowns, beginning: beginningOf, noise } = problemOfGroup(group.group);
   if (kind !== "least-squares" || readByFactor.length > 0) return undefined;
   const last = whole.index[origin]!;
   const parameters = Float64Array.from(rule.parameters, (name) => group.parameters[name]!);
+  const beginning = beginningOf();
   const slots = beginning.initial.length;
   const start = beginning.fromStart ? beginning.initial : valuesAt(rule, whole, last);
   if (start === undefined) return undefined;
@@ -66,7 +67,7 @@ const sdOf = (noise: FittedScatter | undefined): number =>
 
 /** The state vector at a period, past values included; undefined where one of them is not recorded. */
 function valuesAt(rule: Rule, group: ObservedGroup, period: number): Float64Array | undefined {
-  const wanted = [...rule.states.map((state) => ({ state, lag: 0 })), ...rule.memory];
+  const wanted = [...rule.states.map((state) => ({ state, lag: 0 })), ...rule.lags];
   const values = wanted.map(
     ({ state, lag }) => group.values[state]![group.index.indexOf(period - lag)] ?? Number.NaN,
   );
@@ -77,9 +78,7 @@ function valuesAt(rule: Rule, group: ObservedGroup, period: number): Float64Arra
 function inputColumns(rule: Rule, group: ObservedGroup, last: number): readonly Float64Array[] {
   return rule.inputs.map((name) => {
     const column = new Float64Array(last + 1).fill(Number.NaN);
-    group.index.forEach((period, row) => {
-      if (period <= last) column[period] = group.inputs[name]?.[row] ?? Number.NaN;
-    });
+    column.set(inputByPeriod(group, name).subarray(0, last + 1));
     return column;
   });
 }

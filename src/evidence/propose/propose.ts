@@ -130,7 +130,7 @@ function judged({ record, takenFrom, tried, notTried, errors, seed }: Trial): Pr
     .filter((input) => !told.some(({ fit }) => fit.rule.inputs.includes(input)))
     .map((input) => (input === catchSymbol ? (takenFrom ?? input) : input));
   const words = proposalWords(result, { tried: tried.length, heldOut: held?.values, takenFrom, unread });
-  return Object.freeze({ kind: "proposal", ...result, ...words });
+  return { kind: "proposal", ...result, ...words };
 }
 
 function rowOf(standing: Standing, heldOut: number | undefined, beatenBy: string | undefined): ProposedRule {

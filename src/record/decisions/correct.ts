@@ -28,8 +28,8 @@ export function correct(table: ColumnTable, correction: Correction): ColumnTable
   if (!Number.isInteger(row) || row < 1 || row > rowCount(table)) throw noSuchRow(row, rowCount(table));
   if (typeof why !== "string" || why.trim() === "") throw reasonMissing(row, column);
   const cells = column === "" ? undefined : columnNamed(decided(table), column, "the column to correct");
-  const decision: Decision = Object.freeze({ row, column, was: cells?.[row - 1] ?? null, now, why, who });
-  return { ...table, decisions: Object.freeze([...(table.decisions ?? []), decision]) };
+  const decision: Decision = { row, column, was: cells?.[row - 1] ?? null, now, why, who };
+  return { ...table, decisions: [...(table.decisions ?? []), decision] };
 }
 
 /**
@@ -42,7 +42,7 @@ export function undo(table: ColumnTable, row?: number): ColumnTable {
   const at = decisions.map((decision) => row === undefined || decision.row === row).lastIndexOf(true);
   if (at < 0) throw noDecision(row);
   const left = decisions.filter((_, i) => i !== at);
-  return left.length === 0 ? rest : { ...rest, decisions: Object.freeze(left) };
+  return left.length === 0 ? rest : { ...rest, decisions: left };
 }
 
 /** The columns as they are used: with plain names, and with every correction of a cell put in. */

@@ -125,7 +125,7 @@ function counted(step: StepLength, name: CalendarName | undefined): Calendar {
   const { every, of, begins } = step;
   return {
     name,
-    step: Object.freeze({ every, of, ...(begins !== undefined && { begins }) }),
+    step: { every, of, ...(begins !== undefined && { begins }) },
     length: unitLengths[of],
     months: name === "4-4-5" ? 1 : unitMonths[of],
     shift: shiftOf(step),

@@ -44,11 +44,11 @@ export function observedGroup(
     values: byName(columns.states, (i) => pick(split.states[i]!, present)),
     inputs: inputsAt(present),
     ...(inputsOnly.length > 0 && {
-      withoutValue: Object.freeze({
+      withoutValue: {
         index: stepsTo(inputsOnly),
         inputs: inputsAt(inputsOnly),
         rows: picked(merged.rows, inputsOnly).map((row) => row + 1),
-      }),
+      },
     }),
     rows: rows.map((row) => row + 1),
     ...(periods.moments && { labels: Array.from(rows, periods.written) }),
@@ -61,13 +61,13 @@ export function observedGroup(
     }),
   };
   const used = [...present, ...inputsOnly].reduce((sum, i) => sum + merged.held[i]!, 0);
-  return { group: Object.freeze(group), used };
+  return { group, used };
 }
 
 type Named<T> = Readonly<Record<string, T>>;
 
 function byName<T>(columns: readonly ReadColumn[], of: (place: number) => T): Named<T> {
-  return Object.freeze(Object.fromEntries(columns.map(({ name }, i) => [name, of(i)])));
+  return Object.fromEntries(columns.map(({ name }, i) => [name, of(i)]));
 }
 
 function picked(rows: Int32Array, places: Int32Array): Int32Array {
@@ -89,5 +89,5 @@ function censoringOf(
     const side = merged.carrySide(censoring, state);
     return [[name, Int8Array.from(present, (i) => side[i]!)] as const];
   });
-  return sides.length === 0 ? {} : { censoring: Object.freeze(Object.fromEntries(sides)) };
+  return sides.length === 0 ? {} : { censoring: Object.fromEntries(sides) };
 }

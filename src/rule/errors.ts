@@ -1,0 +1,110 @@
+import { ModelError, nearestNames } from "../numeric/index.js";
+import type { Span } from "./syntax/token.js";
+
+/** The line of the text that holds the place, with a caret under each of its letters. */
+function excerptWithCarets(text: string, place: Span): string {
+  const from = text.lastIndexOf("\n", place.start - 1) + 1;
+  const lineEnd = text.indexOf("\n", from);
+  const to = lineEnd === -1 ? text.length : lineEnd;
+  // Long lines are cut around the place so that the caret stays in sight.
+  const cut = Math.max(from, place.start - 60);
+  const shown = text.slice(cut, Math.min(to, place.start + 60)).replace(/\s/gu, " ");
+  const before = [...text.slice(cut, place.start)].length;
+  const carets = Math.max(1, [...text.slice(place.start, Math.min(place.end, to, place.start + 60))].length);
+  return `    ${shown}\n    ${" ".repeat(before)}${"^".repeat(carets)}`;
+}
+
+/** A refusal that points into the rule's text: what was wrong, where, what to do. */
+export function ruleError(
+  code: string,
+  text: string,
+  place: Span,
+  wrong: string,
+  remedy: string,
+): ModelError {
+  const start = Math.min(place.start, text.length);
+  const end = Math.min(Math.max(place.end, start), text.length);
+  const message = `${wrong}\n${excerptWithCarets(text, { start, end })}\n${remedy}`;
+  return new ModelError(code, message, { text, start, end });
+}
+
+const nameList = (names: readonly string[]): string => (names.length === 0 ? "none" : names.join(", "));
+
+/** "Did you mean ...?" for the nearest of the known names, or nothing. */
+export function suggestion(name: string, known: readonly string[]): string {
+  const nearest = nearestNames(name, known);
+  return nearest.length === 0 ? "" : ` Did you mean "${nearest.join('" or "')}"?`;
+}
+
+export function unknownNameError(
+  text: string,
+  place: Span,
+  name: string,
+  known: {
+    readonly parameters: readonly string[];
+    readonly others: readonly string[];
+    readonly functions: readonly string[];
+  },
+): ModelError {
+  const others = known.others.length === 0 ? "" : ` Other names: ${nameList(known.others)}.`;
+  const hint = suggestion(name, [...known.parameters, ...known.others, ...known.functions]);
+  return ruleError(
+    "unknown-name",
+    text,
+    place,
+    `Unknown name "${name}" in the rule.`,
+    `Known parameters: ${nameList(known.parameters)}.${others}${hint}`,
+  );
+}
+
+export function missingOperatorError(text: string, place: Span, left: string, right: string): ModelError {
+  return ruleError(
+    "implied-product",
+    text,
+    place,
+    `There is no sign between "${left}" and "${right}".`,
+    `A product needs its sign: write ${left}*${right}.`,
+  );
+}
+
+export function unknownFunctionError(
+  text: string,
+  place: Span,
+  name: string,
+  functions: readonly string[],
+): ModelError {
+  return ruleError(
+    "not-a-function",
+    text,
+    place,
+    `"${name}" is not a function, so "${name}(" has no meaning.`,
+    `For a product write ${name}*( ... ); for a past value write ${name}[t-1].${suggestion(name, functions)}`,
+  );
+}
+
+export function argumentCountError(text: string, place: Span, usage: string, given: number): ModelError {
+  const values = given === 1 ? "1 value" : `${given} values`;
+  return ruleError(
+    "wrong-arity",
+    text,
+    place,
+    `This call has ${values}, which does not fit ${usage}.`,
+    `Write it as ${usage}.`,
+  );
+}
+
+export function tooLargeError(
+  what: string,
+  limit: number,
+  given: number,
+  text: string,
+  place: Span,
+): ModelError {
+  return ruleError(
+    "rule-too-large",
+    text,
+    place,
+    `The rule has ${given} ${what}, more than the ${limit} that are read.`,
+    "Split it into several lines with named quantities, or into several rules.",
+  );
+}
