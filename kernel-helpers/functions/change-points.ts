@@ -10,6 +10,7 @@ import type { Observations } from "../../src/record/index.js";
 import type { Rule } from "../../src/rule/index.js";
 import { type Figure, figure, type Panel } from "../figures/index.js";
 import { showing, type Table, table } from "../tables/index.js";
+import { acrossGroup, periodColumn } from "./across-periods.js";
 import { caseLog } from "./case-log.js";
 import { shownTogether } from "./shown-together.js";
 
@@ -48,16 +49,15 @@ export function densityDependence(
 }
 
 function breaksTable(looked: ChangePoint): Table {
-  const { period } = looked.fit.observations;
-  const date = { kind: "number", digits: 6, unit: period.unit, grouped: false } as const;
+  const { axis } = looked.fit.observations;
   const percent = Math.round(100 * looked.level);
   return table({
     title: `One change in the parameters of ${looked.fit.rule.text}`,
     columns: [
       ...(looked.groups.length > 1 ? [{ key: "group", label: "Group", kind: "text" } as const] : []),
-      { key: "date", label: "Likeliest date", ...date },
-      { key: "earliest", label: `${percent}% interval, from`, ...date },
-      { key: "latest", label: "to", ...date },
+      periodColumn("date", "Likeliest date", axis),
+      periodColumn("earliest", `${percent}% interval, from`, axis),
+      periodColumn("latest", "to", axis),
       { key: "statistic", label: "Largest F", kind: "number", digits: 3 },
       { key: "probability", label: "By chance", kind: "probability", pairedWith: "probabilityError" },
       { key: "name", label: "Parameter", kind: "text" },
@@ -67,6 +67,7 @@ function breaksTable(looked: ChangePoint): Table {
     rows: looked.groups.flatMap((group) =>
       Object.keys(group.before.parameters).map((name) => ({
         ...group,
+        ...(axis.counts !== "numbers" && group.labels),
         name,
         before: group.before.parameters[name],
         after: group.after.parameters[name],
@@ -81,10 +82,10 @@ function breaksTable(looked: ChangePoint): Table {
 
 function breaksFigure(looked: ChangePoint): Figure {
   const { observations, rule } = looked.fit;
-  const x = { title: observations.period.column, unit: observations.period.unit };
   const panels = looked.groups.flatMap((group): Panel[] => {
     const recorded = observations.groups.find((each) => each.name === group.group)!;
     const [state] = observations.states;
+    const x = acrossGroup(recorded);
     const marks = [
       { mark: "vertical", name: "likeliest date", x: group.date } as const,
       { mark: "vertical", name: "earliest", x: group.earliest, inLegend: false } as const,

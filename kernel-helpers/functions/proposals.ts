@@ -2,6 +2,7 @@ import { type Proposal, type ProposeOptions, propose as tryCatalogue } from "../
 import type { Observations } from "../../src/record/index.js";
 import { type Figure, figure } from "../figures/index.js";
 import { showing, type Table, table } from "../tables/index.js";
+import { acrossGroup } from "./across-periods.js";
 import { caseLog } from "./case-log.js";
 import { shownTogether } from "./shown-together.js";
 
@@ -62,14 +63,14 @@ function leftOutTable(proposal: Proposal): Table {
 }
 
 function supportedFigure(proposal: Proposal): Figure {
-  const { period, states, groups } = proposal.fits[0]!.observations;
+  const { states, groups } = proposal.fits[0]!.observations;
   const [state] = states;
   const names = proposal.rows.filter((row) => row.supported);
   return figure({
     title: "The record and the rules it supports",
     panels: groups.map((group) => ({
       title: group.name,
-      x: { title: period.column, unit: period.unit },
+      x: acrossGroup(group),
       y: { title: state!.column, unit: state!.unit },
       layers: [
         ...proposal.fits.map((fit, i) => {

@@ -120,13 +120,10 @@ export function differences(record: Observations, options: DifferenceOptions = {
 }
 
 /** For the rerun block: how the record was read, and each choice of the options that changed a value. */
-function noteObservations(
-  { states, period, decisions = [] }: Observations,
-  known: readonly Decision[],
-): void {
+function noteObservations({ states, axis, decisions = [] }: Observations, known: readonly Decision[]): void {
   const names = states.map(({ column }) => `"${column}"`).join(", ");
   caseLog.noteStep(
-    `observations of ${names} by "${period.column}" in steps of ${period.calendar ?? `${period.step.every} ${period.step.of}`}`,
+    `observations of ${names} by "${axis.column}" in steps of ${axis.calendar ?? `${axis.step.every} ${axis.step.of}`}`,
   );
   for (const decision of decisions)
     if (!known.includes(decision)) caseLog.noteStep(`decision: ${decisionSentence(decision)}`);

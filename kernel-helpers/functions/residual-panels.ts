@@ -1,6 +1,7 @@
 import type { Fit, GroupFit } from "../../src/estimate/index.js";
 import { normalQuantile } from "../../src/numeric/index.js";
 import { type Figure, figure, type Panel } from "../figures/index.js";
+import { acrossRecord } from "./across-periods.js";
 
 type Point = GroupFit["points"][number];
 
@@ -30,7 +31,7 @@ interface Series {
 }
 
 function panelsOf(fit: Fit, state: string, groups: readonly Series[]): Panel[] {
-  const { period, states } = fit.observations;
+  const { states } = fit.observations;
   const unit = states.find((each) => each.name === state)?.unit ?? "";
   const log = fit.options.distribution === "lognormal";
   const residual = { title: log ? "Residual of the logarithm" : "Residual", unit: log ? "" : unit };
@@ -51,7 +52,7 @@ function panelsOf(fit: Fit, state: string, groups: readonly Series[]): Panel[] {
   return [
     {
       title: "By period",
-      x: { title: period.column, unit: period.unit },
+      x: acrossRecord(fit.observations),
       y: residual,
       layers: [
         zero,

@@ -74,14 +74,6 @@ export interface Observations {
   readonly flows?: readonly string[];
   /** The axis that all groups lie on; its origin is the earliest row of the record. */
   readonly axis: PeriodAxis;
-  /** The period column, its unit, and the length of one step in that unit. */
-  readonly period: {
-    readonly column: string;
-    readonly unit: string;
-    readonly step: StepLength;
-    /** The calendar's name, where one was chosen by name. */
-    readonly calendar?: string;
-  };
   /** Order of events inside a period, as the analyst stated it; "" when not stated. */
   readonly order: string;
   readonly findings: readonly Finding[];

@@ -1,12 +1,14 @@
 import type { Fit, GroupFit } from "../../estimate/index.js";
+import { labelAt } from "../../record/index.js";
 import { type Refitter, refitter } from "../refit/refitter.js";
 
 /** The estimates from part of the record. */
 export interface Window {
   readonly name: string;
-  /** First and last time used, in the period column's unit. */
+  /** First and last time used, in the period column's unit, and their periods in words. */
   readonly from: number;
   readonly to: number;
+  readonly periods: readonly [string, string];
   readonly count: number;
   readonly estimates: readonly {
     readonly name: string;
@@ -26,7 +28,7 @@ const shares = [0.2, 0.4];
 export function windows(fit: Fit, group: GroupFit): readonly Window[] {
   const again = refitter(fit, group);
   if (again === undefined) return [];
-  const { time } = fit.observations.groups.find((each) => each.name === group.group)!;
+  const { time, axis, index } = fit.observations.groups.find((each) => each.name === group.group)!;
   const last = time.length - 1;
   const cut = (share: number): number => Math.round(share * time.length);
   const parts: readonly (readonly [string, number, number])[] = [
@@ -35,6 +37,7 @@ export function windows(fit: Fit, group: GroupFit): readonly Window[] {
     ...shares.map((share) => [`without the first ${100 * share}%`, cut(share), last] as const),
     ...shares.map((share) => [`without the last ${100 * share}%`, 0, last - cut(share)] as const),
   ];
+  const label = (row: number): string => labelAt(axis, index[row]!);
   const seen = new Set<string>();
   return parts.flatMap(([name, from, to]) => {
     if (seen.has(`${from} ${to}`)) return [];
@@ -49,7 +52,16 @@ export function windows(fit: Fit, group: GroupFit): readonly Window[] {
       const shift = standardError === undefined ? undefined : (value - estimate.value) / standardError;
       return { name: estimate.name, value, shift };
     });
-    return [{ name, from: time[from]!, to: time[to]!, count: end - first, estimates }];
+    return [
+      {
+        name,
+        from: time[from]!,
+        to: time[to]!,
+        periods: [label(from), label(to)],
+        count: end - first,
+        estimates,
+      },
+    ];
   });
 }
 
