@@ -1,17 +1,20 @@
 import {
-  type ChangePoint,
   type ChangePointOptions,
   type DensityDependence,
   type DensityOptions,
+  type ChangePoint as EngineChangePoint,
   changePoint as findChangePoint,
   densityDependence as testDensity,
 } from "../../src/evidence/index.js";
+import { frozenCopy } from "../../src/numeric/index.js";
 import type { Observations } from "../../src/record/index.js";
-import type { Rule } from "../../src/rule/index.js";
+import { type Rule, ruleLabel } from "../../src/rule/index.js";
 import { type Figure, figure, type Panel } from "../figures/index.js";
+import type { ChangePoint } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { acrossGroup, periodColumn } from "./across-periods.js";
 import { caseLog } from "./case-log.js";
+import { presentFitIn } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
 
 /**
@@ -27,9 +30,9 @@ export function changePoint(
   observations: Observations,
   options: ChangePointOptions = {},
 ): ChangePoint {
-  const looked = findChangePoint(rule, observations, { seed: caseLog.seed(), ...options });
-  caseLog.noteStep(`looked for a break in "${rule.text}": ${looked.sentence}`);
-  return showing({ ...looked }, () => shownTogether([breaksTable(looked), breaksFigure(looked)]));
+  const looked = findChangePoint(rule, observations, { seed: caseLog.seed(), ...frozenCopy(options) });
+  caseLog.noteStep(`looked for a break in "${ruleLabel(rule)}": ${looked.sentence}`);
+  return showing(presentFitIn(looked), () => shownTogether([breaksTable(looked), breaksFigure(looked)]));
 }
 
 /**
@@ -43,16 +46,16 @@ export function densityDependence(
   observations: Observations,
   options: DensityOptions = {},
 ): DensityDependence {
-  const tested = testDensity(observations, { seed: caseLog.seed(), ...options });
+  const tested = testDensity(observations, { seed: caseLog.seed(), ...frozenCopy(options) });
   caseLog.noteStep(`tested density dependence: ${tested.sentence}`);
-  return showing({ ...tested }, () => shownTogether([densityTable(tested)]));
+  return showing(tested, () => shownTogether([densityTable(tested)]));
 }
 
-function breaksTable(looked: ChangePoint): Table {
+function breaksTable(looked: EngineChangePoint): Table {
   const { axis } = looked.fit.observations;
   const percent = Math.round(100 * looked.level);
   return table({
-    title: `One change in the parameters of ${looked.fit.rule.text}`,
+    title: `One change in the parameters of ${ruleLabel(looked.fit.rule)}`,
     columns: [
       ...(looked.groups.length > 1 ? [{ key: "group", label: "Group", kind: "text" } as const] : []),
       periodColumn("date", "Likeliest date", axis),
@@ -80,7 +83,7 @@ function breaksTable(looked: ChangePoint): Table {
   });
 }
 
-function breaksFigure(looked: ChangePoint): Figure {
+function breaksFigure(looked: EngineChangePoint): Figure {
   const { observations, rule } = looked.fit;
   const panels = looked.groups.flatMap((group): Panel[] => {
     const recorded = observations.groups.find((each) => each.name === group.group)!;
@@ -117,7 +120,7 @@ function breaksFigure(looked: ChangePoint): Figure {
     ];
   });
   return figure({
-    title: `When the parameters of ${rule.text} may have changed`,
+    title: `When the parameters of ${ruleLabel(rule)} may have changed`,
     panels,
     summary: looked.sentence,
   });

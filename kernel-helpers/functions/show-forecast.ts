@@ -1,5 +1,7 @@
 import type { Forecast, GroupForecast } from "../../src/projection/index.js";
+import { ruleLabel } from "../../src/rule/index.js";
 import { type FanFigureOptions, type Figure, fanFigure, type ProjectedSeries } from "../figures/index.js";
+import { groupName } from "../results/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
 import { acrossGroup, acrossRecord, periodColumn } from "./across-periods.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
@@ -10,20 +12,9 @@ export function showForecast(ahead: Forecast): readonly (Figure | Table)[] {
   return [...fanCharts(ahead), aheadTable(ahead), ...(contrast === undefined ? [] : [contrast])];
 }
 
-/** How a group and scenario are named together. */
-export function projectedName({
-  group,
-  scenario,
-}: {
-  readonly group: string;
-  readonly scenario: string;
-}): string {
-  return [group, scenario].filter((part) => part !== "").join(", ");
-}
-
 function fanCharts(ahead: Forecast): Figure[] {
   return ahead.fit.rule.states.map((state) =>
-    fanFigure({ ...fanOf(ahead, state), title: `Forecast of ${ahead.fit.rule.text}` }),
+    fanFigure({ ...fanOf(ahead, state), title: `Forecast of ${ruleLabel(ahead.fit.rule)}` }),
   );
 }
 
@@ -59,7 +50,7 @@ function projected(ahead: Forecast, group: GroupForecast, name: string): Project
   const end = group.index.indexOf(group.recordEnd);
   const horizon = group.predictability?.predictionHorizon;
   return {
-    name: projectedName(group),
+    name: groupName(group),
     x: acrossGroup(recorded),
     recorded: { name: "recorded", x: recorded.time, y: recorded.values[name]! },
     central: { name: "fitted path", x, y: state.central },
@@ -86,7 +77,7 @@ function aheadTable(ahead: Forecast): Table {
   return table({
     title: "Periods ahead",
     columns: [
-      ...several("group", "Group", ahead.groups.map(projectedName)),
+      ...several("group", "Group", ahead.groups.map(groupName)),
       ...several("state", "State", ahead.fit.rule.states),
       periodColumn("time", axis.column, axis),
       { key: "central", label: "Fitted path", ...number },
@@ -131,7 +122,7 @@ function rowsAhead(group: GroupForecast, level: number, each: number): Readonly<
       !shown.has(t)
         ? []
         : {
-            group: projectedName(group),
+            group: groupName(group),
             state: state.state,
             time: group.labels?.[t] ?? group.time[t],
             central: state.central[t],
@@ -152,7 +143,7 @@ function contrastTable(ahead: Forecast): Table | undefined {
     return group.states.map((state, s) => {
       const end = group.index.length - 1;
       const difference = state.central[end]! - first.states[s]!.central[end]!;
-      return { what: projectedName(group), than: first.scenario, state: state.state, difference };
+      return { what: groupName(group), than: first.scenario, state: state.state, difference };
     });
   });
   if (rows.length === 0) return undefined;
@@ -174,6 +165,6 @@ function notesOf(ahead: Forecast): string[] {
   return [
     "Mean path: uncertainty of the parameters. Future observation: that and the error of a single value.",
     `${paths} drawn paths, seed ${seed}; quantiles by definition 7.`,
-    ...cautionsByGroup(ahead.groups.map((group) => ({ ...group, group: projectedName(group) }))),
+    ...cautionsByGroup(ahead.groups.map((group) => ({ ...group, group: groupName(group) }))),
   ];
 }

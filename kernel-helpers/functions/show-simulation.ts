@@ -1,4 +1,5 @@
 import type { GroupForecast, Simulation } from "../../src/projection/index.js";
+import { ruleLabel } from "../../src/rule/index.js";
 import { type Figure, figure, type Layer } from "../figures/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
 import { acrossPeriods, periodColumn } from "./across-periods.js";
@@ -15,7 +16,7 @@ const percent = (level: number): string => `${Number((100 * level).toPrecision(1
 function figuresOf(run: Simulation): Figure[] {
   return run.rule.states.map((name, s) =>
     figure({
-      title: `Simulation${ruleTitle(run.rule.text, "of")}: ${name}`,
+      title: `Simulation${ruleTitle(ruleLabel(run.rule), "of")}: ${name}`,
       panels: run.groups.map((group) => ({
         title: group.scenario,
         x: acrossPeriods(run.axis, group.time[0]! - group.index[0]! * run.axis.step.every),

@@ -40,7 +40,7 @@ export interface ObservedGroup {
   readonly name: string;
   /** Whole steps since the first row of the group, increasing; 0 at its first row. A gap stays a gap. */
   readonly index: Int32Array;
-  /** The period column as it was read, in `period.unit`; from the earliest row where it holds dates. */
+  /** The period column as it was read, in the unit of `axis`; from the earliest row where it holds dates. */
   readonly time: Float64Array;
   /** By state name: the values, finite. */
   readonly values: Readonly<Record<string, Float64Array>>;

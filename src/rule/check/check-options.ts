@@ -26,10 +26,12 @@ function optionValueError(option: string, name: string, wanted: string, given: u
   );
 }
 
-function nameOptionError(given: unknown): ModelError {
-  return new ModelError(
+function checkName(name: unknown): void {
+  if (name === undefined || (typeof name === "string" && name.trim() !== "")) return;
+  const given = JSON.stringify(name) ?? String(name);
+  throw new ModelError(
     "unreadable-option",
-    `Option \`name\` must be a text; ${JSON.stringify(given) ?? String(given)} was given. Write \`name: "crowding"\`.`,
+    `Option \`name\` must be a text; ${given} was given. Write \`name: "crowding"\`.`,
     { option: "name", given },
   );
 }
@@ -105,9 +107,4 @@ export function checkOptions(rule: CheckedRule, options: RecurrenceOptions): voi
       if (!accepts(value as never, name)) throw optionValueError(option, name, expected(name), value);
     }
   }
-}
-
-function checkName(name: unknown): void {
-  if (name === undefined || (typeof name === "string" && name.trim() !== "")) return;
-  throw nameOptionError(name);
 }
