@@ -18,7 +18,7 @@ function copyOf<T>(given: Readonly<Record<string, T>> | undefined): Readonly<Rec
   return Object.freeze(Object.fromEntries(entries));
 }
 
-/** Reads, checks and keeps a rule; `named` is what the catalogue knows of it. */
+/** Reads and checks a rule; `named` is its catalogue entry. */
 export function makeRule(text: string, options: RecurrenceOptions, named?: NamedRule): Rule {
   const normal = text.normalize("NFC").replace(/\r\n?/gu, "\n");
   const declared: Declarations = { parameters: options.parameters, inputs: options.inputs ?? [] };
