@@ -1,4 +1,4 @@
-import type { Fit, GroupFit } from "../../src/estimate/index.js";
+import { type Fit, type GroupFit, problemOf } from "../../src/estimate/index.js";
 import { normalQuantile } from "../../src/numeric/index.js";
 import { ruleLabel } from "../../src/rule/index.js";
 import { type Figure, figure, type Panel } from "../figures/index.js";
@@ -34,7 +34,7 @@ interface Series {
 function panelsOf(fit: Fit, state: string, groups: readonly Series[]): Panel[] {
   const { states } = fit.observations;
   const unit = states.find((each) => each.name === state)?.unit ?? "";
-  const log = fit.options.distribution === "lognormal";
+  const { log } = problemOf(fit).scale;
   const residual = { title: log ? "Residual of the logarithm" : "Residual", unit: log ? "" : unit };
   const before = groups.map(({ name, points }) => ({ name, pairs: neighbours(points) }));
   const zero = { mark: "threshold", name: "zero", y: 0, inLegend: false } as const;

@@ -1,4 +1,4 @@
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import { quantile } from "../../numeric/index.js";
 import {
   type Forecast,
@@ -99,7 +99,7 @@ function recordedPast(
   const { value, sign } = levelSide(question);
   const at = values[state]!.findIndex((each) => sign * (each - value) >= 0);
   // A record that reads the state through an unknown factor is on another scale.
-  if (at <= 0 || fit.options.factor?.[state] !== undefined) return undefined;
+  if (at <= 0 || problemOf(fit).readByFactor.includes(state)) return undefined;
   return { time: time[at]!, words: labels?.[at] ?? `${periodUnit} ${plain(time[at]!, 6)}` };
 }
 

@@ -154,7 +154,7 @@ function candidates(
   when: NextReadingOptions["values"],
 ): readonly { readonly time: number; readonly rows: readonly number[] }[] {
   const { standing } = rivals[0]!;
-  const process = rivals.some((rival) => rival.standing.fit!.options.errors !== "observation");
+  const process = rivals.some(({ standing: { change } }) => change.some((noise) => noise !== undefined));
   const times = Array.from({ length: standing.ground.periods + 1 }, (_, row) => standing.timeAt(row));
   const wanted = (time: number): boolean => {
     if (when === undefined) return true;

@@ -9,15 +9,8 @@ import {
   runStart,
   type StartOptions,
 } from "../../dynamics/index.js";
-import type { Fit } from "../../estimate/index.js";
-import {
-  type FitGround,
-  fitGround,
-  fittedNoise,
-  type Ground,
-  type Noise,
-  ruleNoise,
-} from "../../projection/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
+import { type FitGround, fitGround, type Ground, type Noise, ruleNoise } from "../../projection/index.js";
 import { indexOf, labelAt, labelBetween, type PeriodAxis } from "../../record/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../../rule/index.js";
 import type { MeasureUnits } from "../measure/measure.js";
@@ -102,7 +95,7 @@ function fitStanding(fit: Fit, options: StandingOptions): Standing {
     timeAt: (row) => first + (ground.from + row) * axis.step.every,
     timeWords: timeWordsOf(axis, first),
     timeOf: timeReader(axis, first),
-    change: fittedNoise(fit, group).change,
+    change: problemOf(fit).group(group.group).noise.change,
     plans,
     paths: options.paths ?? 2000,
     seed: options.seed ?? 1,
