@@ -7,6 +7,7 @@ import { conventionsOf } from "./options/conventions.js";
 import type { FitOptions } from "./options/fit-options.js";
 import { inputWarnings } from "./options/input-warnings.js";
 import { matchStates } from "./options/match-states.js";
+import { recordWarnings } from "./options/record-warnings.js";
 import { type FitProblem, fitProblem } from "./problem/fit-problem.js";
 import { refuseMissingArgument } from "./refusals.js";
 import type { Criteria } from "./result/criteria.js";
@@ -65,7 +66,7 @@ export function fit(rule: Rule, observations: Observations, options: FitOptions)
     groups,
     criteria,
     ...(population && { population }),
-    warnings: [...rule.findings, ...inputWarnings(rule, matched, options)],
+    warnings: [...rule.findings, ...recordWarnings(matched), ...inputWarnings(rule, matched, options)],
     conventions: conventionsOf(options, groups),
   };
   problems.set(fitted, fitProblem(fitted, fit));
