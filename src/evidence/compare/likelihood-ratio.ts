@@ -1,5 +1,5 @@
 import type { Fit } from "../../estimate/index.js";
-import { chiSquareCdf } from "../../numeric/index.js";
+import { chiSquareUpperTail } from "../../numeric/index.js";
 import { nestingOf } from "./nesting.js";
 
 /** Whether parameters that a smaller rule leaves out are worth having. */
@@ -43,7 +43,7 @@ function ratioOf(smaller: Fit, larger: Fit, at: Readonly<Record<string, number>>
   const degreesOfFreedom = names.length * larger.groups.length;
   const bounds = { ...larger.rule.bounds, ...larger.options.bounds };
   const edge = names.filter((name) => bounds[name]?.includes(at[name]!));
-  const probability = edge.length > 0 ? undefined : 1 - chiSquareCdf(statistic, degreesOfFreedom);
+  const probability = edge.length > 0 ? undefined : chiSquareUpperTail(statistic, degreesOfFreedom);
   const base = {
     smaller: smaller.rule.text,
     larger: larger.rule.text,
