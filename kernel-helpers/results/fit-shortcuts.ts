@@ -4,6 +4,7 @@ import { attach } from "./attach.js";
 import { noIntervalError, unknownValueError } from "./errors.js";
 import { groupNamed, onlyGroup } from "./group-named.js";
 import { namedValues } from "./named-values.js";
+import { type Observations, withLast } from "./record-shortcuts.js";
 
 /** What was estimated, by name; left out of listings and copies of the fit. */
 export interface EstimatedValues {
@@ -24,6 +25,7 @@ export interface GroupFit extends EngineGroupFit, EstimatedValues {}
 
 /** A rule with its parameters estimated from a record; `values` and `interval` speak of its only group. */
 export interface Fit extends EngineFit, EstimatedValues {
+  readonly observations: Observations;
   readonly groups: readonly GroupFit[];
   /** A group of the record by its name. */
   readonly group: (name: string) => GroupFit;
@@ -31,6 +33,7 @@ export interface Fit extends EngineFit, EstimatedValues {
 
 /** Gives a fit and each of its groups the shortcuts to what was estimated. */
 export function withEstimates(fit: EngineFit): Fit {
+  withLast(fit.observations);
   for (const group of fit.groups) attach<EngineGroupFit, EstimatedValues>(group, ofGroup(fit, group));
   const groups = fit.groups as readonly GroupFit[];
   const shared = fit.options.groups === "combined" ? fit.population : undefined;

@@ -7,6 +7,7 @@ import { conventionsOf } from "./options/conventions.js";
 import type { FitOptions } from "./options/fit-options.js";
 import { inputWarnings } from "./options/input-warnings.js";
 import { matchStates } from "./options/match-states.js";
+import { matchNotes, unitWarnings } from "./options/record-against-rule.js";
 import { refuseMissingArgument } from "./refusals.js";
 import type { Estimate } from "./result/estimate-of.js";
 import type { GroupFit } from "./result/group-fit.js";
@@ -40,7 +41,7 @@ export interface Fit {
  * @throws {ModelError} `argument-missing` | `errors-not-stated` | `unknown-spread` | `bad-spread` | `factor-without-trajectory` |
  *   `robust-not-by-squares` | `rule-jumps` |
  *   `states-not-recorded` | `too-few-observations` | `no-change` | `no-logarithm` | `not-a-count` | `all-censored` |
- *   `no-finite-start` | `unknown-name` | `start-outside-bounds` | `input-not-recorded` | `input-missing-in-period`.
+ *   `no-finite-start` | `unit-scales-differ` | `unknown-name` | `start-outside-bounds` | `input-not-recorded` | `input-missing-in-period`.
  * @see Bates, D. M. and Watts, D. G. (1988), Nonlinear Regression Analysis and Its Applications, chapters 2 and 6.
  * @example
  * const crowding = recurrence("ΔN = r*N*(1 - N/K)");
@@ -52,6 +53,7 @@ export function fit(rule: Rule, observations: Observations, options: FitOptions)
   if (observations?.kind !== "observations") throw refuseMissingArgument("record");
   checkOptions(rule, options);
   const matched = matchStates(rule, observations);
+  const unitsDisagree = unitWarnings(rule, matched, options);
   const { groups, population } = fitGroups(rule, matched.groups, options);
   return {
     kind: "fit",
@@ -60,7 +62,7 @@ export function fit(rule: Rule, observations: Observations, options: FitOptions)
     options: { ...options },
     groups,
     ...(population && { population }),
-    warnings: [...rule.findings, ...inputWarnings(rule, matched, options)],
-    conventions: conventionsOf(options, groups),
+    warnings: [...rule.findings, ...unitsDisagree, ...inputWarnings(rule, matched, options)],
+    conventions: [...conventionsOf(options, groups), ...matchNotes(rule, observations)],
   };
 }

@@ -22,3 +22,4 @@ export { type RuleLanguage, ruleLanguage } from "./rule-language.js";
 export { ruleText } from "./rule-text.js";
 export { intervalAlgebra, isLinearInStates, type PlaceOver, type StepOver, stepOver } from "./step-over.js";
 export { ruleTex } from "./tex/rule-tex.js";
+export { unitClash } from "./units/unit-clash.js";
