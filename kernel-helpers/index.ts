@@ -31,6 +31,7 @@ export type {
   ExactTrajectory,
   ExactTrajectoryOptions,
   HeldSetting,
+  InputPlan,
   LyapunovExponent,
   LyapunovExponentOptions,
   MatrixGrowth,
@@ -59,7 +60,6 @@ export type {
 export { leastSquares, ModelError } from "../src/numeric/index.js";
 export type {
   ForecastOptions,
-  InputPlan,
   SimulateOptions,
 } from "../src/projection/index.js";
 export type {

@@ -8,7 +8,7 @@ import {
 import { ruleLabel } from "../../src/rule/index.js";
 import { type Figure, fittedFigure, profileFigure } from "../figures/index.js";
 import { type Fit, withEstimates } from "../results/index.js";
-import { raised, showing, type Table, table } from "../tables/index.js";
+import { showing, superscript, type Table, table } from "../tables/index.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
 import { ruleNotes } from "./rule-title.js";
 import { presentObservations } from "./show-observations.js";
@@ -34,7 +34,7 @@ function estimatesTable(fitted: EngineFit): Table {
   const limit = (value: number | undefined): number | string => value ?? "none";
   const rows = estimates(fitted).map((row: EstimateRow) => ({
     ...row,
-    unit: raised(row.unit),
+    unit: superscript(row.unit),
     error: row.standardError ?? "not determined",
     lower: limit(row.profile.lower),
     upper: limit(row.profile.upper),

@@ -50,7 +50,7 @@ export function withEstimates(fit: EngineFit): Fit {
 type Makers = { readonly [Name in keyof EstimatedValues]: () => EstimatedValues[Name] };
 
 function ofGroup({ rule, options }: EngineFit, group: EngineGroupFit): Makers {
-  const reach = Math.max(0, ...rule.memory.map(({ lag }) => lag));
+  const reach = Math.max(0, ...rule.lags.map(({ lag }) => lag));
   const given = options.errors === "observation" ? rule.states : [];
   const held = {
     ...group.parameters,

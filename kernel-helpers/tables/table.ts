@@ -1,5 +1,5 @@
 import { frozenCopy } from "../../src/numeric/index.js";
-import { type NumberFormat, numberFormat } from "./number-format.js";
+import { type NumberFormat, numberFormat } from "../wording/index.js";
 import { columnRepeated, noColumns, unknownColumnKind } from "./refusals.js";
 import { showing } from "./show-itself.js";
 import { tableHtml } from "./table-html.js";

@@ -23,7 +23,9 @@ export {
   studentCdf,
   studentQuantile,
 } from "./probability/distributions.js";
+export { gammaDraw } from "./probability/gamma-draw.js";
 export { logGamma } from "./probability/log-gamma.js";
+export { poissonDraw } from "./probability/poisson-draw.js";
 export { quantile } from "./probability/quantile.js";
 export { type RandomStream, randomStream } from "./probability/random-stream.js";
 export { findRoot, type RootOptions } from "./search/find-root.js";

@@ -3,11 +3,11 @@ import type { NamedRule } from "./catalogue/named-rule.js";
 import type { RuleCatalogue } from "./catalogue/rules.js";
 import { shortNames } from "./catalogue/short-names.js";
 import { checkOptions } from "./check/check-options.js";
-import type { Declared } from "./check/checked-rule.js";
-import { memoryOf } from "./graph/build-graph.js";
+import type { Declarations } from "./check/checked-rule.js";
+import { laggedStates } from "./graph/build-graph.js";
 import type { RecurrenceOptions } from "./recurrence-options.js";
 import type { Rule } from "./rule.js";
-import { defineRule, keepDefinition } from "./rule-definition.js";
+import { defineRule, storeDefinition } from "./rule-definition.js";
 import { unitFindings } from "./units/unit-findings.js";
 
 /**
@@ -17,7 +17,7 @@ import { unitFindings } from "./units/unit-findings.js";
  */
 export function makeRule(text: string, options: RecurrenceOptions, named?: NamedRule): Rule {
   const normal = text.normalize("NFC").replace(/\r\n?/gu, "\n");
-  const declared: Declared = { parameters: options.parameters, inputs: options.inputs ?? [] };
+  const declared: Declarations = { parameters: options.parameters, inputs: options.inputs ?? [] };
   const definition = defineRule(normal, declared);
   const { checked } = definition;
   checkOptions(checked, options);
@@ -31,7 +31,7 @@ export function makeRule(text: string, options: RecurrenceOptions, named?: Named
     text: normal,
     form: first.kind === "change" ? "change" : "next",
     states: [...checked.states],
-    memory: memoryOf(checked),
+    lags: laggedStates(checked),
     quantities: [...checked.quantities],
     inputs: [...checked.inputs],
     parameters: [...checked.parameters],
@@ -44,6 +44,6 @@ export function makeRule(text: string, options: RecurrenceOptions, named?: Named
     findings: [...checked.findings, ...unitFindings(checked, units)],
     ...(named === undefined ? {} : { named }),
   };
-  keepDefinition(rule, definition);
+  storeDefinition(rule, definition);
   return rule;
 }

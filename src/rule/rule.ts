@@ -24,7 +24,7 @@ export interface Rule {
    * Past values that the rule reads, for rules with lags; empty otherwise. The state vector of the compiled
    * rule is the states in order and then these.
    */
-  readonly memory: readonly { readonly state: string; readonly lag: number }[];
+  readonly lags: readonly { readonly state: string; readonly lag: number }[];
   /** Named values inside the period, in event order. */
   readonly quantities: readonly string[];
   readonly inputs: readonly string[];

@@ -1,5 +1,5 @@
 import { crossedLevel, type Forecast, levelSide, type Simulation } from "../../projection/index.js";
-import { type Rule, roughness, ruleLabel } from "../../rule/index.js";
+import { nonsmoothCalls, type Rule, ruleLabel } from "../../rule/index.js";
 import { refuseFewUnits, refuseLevel, refuseStateUnknown, refuseTarget } from "../refusals.js";
 import { acrossUnits } from "./across-units.js";
 import { groupReach } from "./group-reach.js";
@@ -46,7 +46,7 @@ function ruleOf(ahead: Forecast | Simulation): Rule {
 }
 
 function isSmooth(rule: Rule): boolean {
-  const { kinks, jumps } = roughness(rule);
+  const { kinks, jumps } = nonsmoothCalls(rule);
   return kinks.length === 0 && jumps.length === 0;
 }
 

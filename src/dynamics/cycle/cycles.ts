@@ -72,7 +72,7 @@ function described(held: HeldStep, points: readonly number[]): Cycle {
 export function cycles(rule: Rule, options: CyclesOptions): Cycles {
   const period = options?.period;
   if (period === undefined) throw missingPeriod();
-  if (rule.states.length !== 1 || rule.memory.length > 0) throw oneStateOnly("A cycle", rule.states);
+  if (rule.states.length !== 1 || rule.lags.length > 0) throw oneStateOnly("A cycle", rule.states);
   if (!Number.isSafeInteger(period) || period < 1 || period > 64) {
     throw unreadableOption("period", "a whole number from 1 to 64", period);
   }

@@ -51,13 +51,13 @@ function startOf(rule: Rule, { initial }: ExactTrajectoryOptions): Rational[] {
   const past = (state: string, lag: number): Rational => {
     const given = initial[state];
     const values: readonly (ExactValue | undefined)[] = Array.isArray(given) ? given : [given];
-    const lags = rule.memory.filter((kept) => kept.state === state).length;
+    const lags = rule.lags.filter((kept) => kept.state === state).length;
     if (values.length !== lags + 1) throw wrongHistory(state, lags + 1, values.length);
     return exactValue("first value of", state, values.at(-1 - lag), Object.keys(initial));
   };
   return [
     ...rule.states.map((state) => past(state, 0)),
-    ...rule.memory.map(({ state, lag }) => past(state, lag)),
+    ...rule.lags.map(({ state, lag }) => past(state, lag)),
   ];
 }
 

@@ -87,7 +87,7 @@ function probabilityOf(
  */
 export function basins(rule: Rule, options: BasinsOptions): Basins {
   const { range: within, count: starts = 400, periods = 3_000 } = options;
-  if (rule.states.length !== 1 || rule.memory.length > 0) throw oneStateOnly("A basin", rule.states);
+  if (rule.states.length !== 1 || rule.lags.length > 0) throw oneStateOnly("A basin", rule.states);
   if (!(within[0] < within[1]))
     throw unreadableOption("within", "two numbers, lowest first", JSON.stringify(within));
   const held = holdStep(rule, options, "basin");

@@ -45,7 +45,7 @@ function corners(values: Float64Array): Cobweb["web"] {
  */
 export function cobweb(rule: Rule, options: CobwebOptions): Cobweb {
   const { periods = 30 } = options;
-  if (rule.states.length !== 1 || rule.memory.length > 0) throw oneStateOnly("A cobweb", rule.states);
+  if (rule.states.length !== 1 || rule.lags.length > 0) throw oneStateOnly("A cobweb", rule.states);
   const held = holdStep(rule, options, "cobweb");
   const [state] = rule.states;
   const run = trajectory(rule, { ...options, periods });

@@ -61,7 +61,7 @@ function polished(matrix: Matrix, right: readonly number[], left: readonly numbe
 export function matrixGrowth(rule: Rule, setting: HeldSetting = {}): MatrixGrowth {
   const held = holdStep(rule, setting, "long run");
   const { next, matrix: flat } = held.slopes(new Float64Array(held.width));
-  if (!isLinearInStates(rule) || rule.memory.length > 0 || next.some((value) => value !== 0))
+  if (!isLinearInStates(rule) || rule.lags.length > 0 || next.some((value) => value !== 0))
     throw notAMatrixRule();
   const size = held.width;
   const rows = Array.from({ length: size }, (_, i) => [...flat.subarray(i * size, (i + 1) * size)]);

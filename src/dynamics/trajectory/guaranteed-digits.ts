@@ -1,4 +1,10 @@
-import { type Interval, intervalAlgebra, type PlaceOver, type Rule, stepOver } from "../../rule/index.js";
+import {
+  type Interval,
+  intervalAlgebra,
+  type Rule,
+  type StepArgumentsOver,
+  stepOver,
+} from "../../rule/index.js";
 import { type HeldSetting, holdStep } from "../setting/held-step.js";
 import { type InitialValues, initialVector } from "../setting/setting.js";
 
@@ -34,7 +40,7 @@ interface Known {
 function advance(
   rule: Rule,
   known: Known,
-  place: (state: readonly Interval[]) => PlaceOver<Interval>,
+  place: (state: readonly Interval[]) => StepArgumentsOver<Interval>,
 ): Known {
   const step = stepOver(rule, intervalAlgebra);
   const rounded = step.next(place(known.center.map(exactly)));
@@ -63,7 +69,7 @@ export function guaranteedDigits(rule: Rule, options: GuaranteedOptions = {}): G
   const held = holdStep(rule, options, "number of steps to which digits are kept");
   const parameters = Array.from(held.parameters, exactly);
   const inputs = Array.from(held.inputs, exactly);
-  const place = (state: readonly Interval[]): PlaceOver<Interval> => ({
+  const place = (state: readonly Interval[]): StepArgumentsOver<Interval> => ({
     state,
     parameters,
     input: (slot) => inputs[slot]!,

@@ -93,7 +93,7 @@ function planOf(
 
 function refuseUnlike(first: Fit, other: Fit): void {
   if (first.options.errors !== other.options.errors) throw refuseUnlikeErrors();
-  const lags = first.rule.memory.length - other.rule.memory.length;
+  const lags = first.rule.lags.length - other.rule.lags.length;
   if (first.options.errors === "process" && lags !== 0 && first.groups[0]!.count !== other.groups[0]!.count)
     throw refuseUnlikeStarts(first.groups[0]!.count, other.groups[0]!.count);
   const same =

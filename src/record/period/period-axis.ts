@@ -50,6 +50,11 @@ export function labelsAt(axis: PeriodAxis, indexes: ArrayLike<number>): readonly
   return Array.from(indexes, (index) => labelAt(axis, index));
 }
 
+/** A period in a sentence: "month 33", or its label where periods are not mere numbers. */
+export function periodWords(axis: PeriodAxis, index: number): string {
+  return axis.counts === "numbers" ? `${axis.unit} ${labelAt(axis, index)}` : labelAt(axis, index);
+}
+
 function momentAt({ counts, origin, stride, day = 1, clock = 0 }: PeriodAxis, index: number): Moment {
   const at = origin + index * stride;
   return counts === "months" ? clampedDate(at, day) + clock : at;
@@ -65,36 +70,44 @@ export function indexOf(axis: PeriodAxis, label: string | number | Date): number
   if (axis.counts === "numbers") return whole((numberIn(label) - axis.origin) / axis.stride, rounding);
   const read = periodText(typeof label === "number" ? String(label) : label);
   if (read === undefined) return undefined;
-  const [first, last] = axis.counts === "months" ? monthsOf(axis, read) : momentsOf(axis, read);
-  const [from, to] = [Math.ceil(first - rounding), Math.floor(last + rounding)];
+  const [from, to] = axis.counts === "months" ? monthsOf(axis, read) : momentsOf(axis, read);
   if (from === to) return from + 0;
   // No period lies in what the text names: a day or a time close to one is taken for it, as a late reading is.
-  const isClose = from > to && (read.form === "date" || read.form === "millisecond");
-  return isClose && axis.counts === "moments" ? whole(first, leeway) : undefined;
+  const isClose = axis.counts === "moments" && from > to && isInstant(read);
+  return isClose ? whole((read.start - axis.origin) / axis.stride, leeway) : undefined;
 }
+
+const isInstant = ({ form }: PeriodText): boolean => form === "date" || form === "millisecond";
 
 function numberIn(label: string | number | Date): number {
   return label instanceof Date || String(label).trim() === "" ? Number.NaN : Number(label);
 }
 
-/** First and last place, in periods, of the months that a text names. */
-function monthsOf({ origin, stride, step }: PeriodAxis, read: PeriodText): readonly [number, number] {
+/** First and last period of the months that a text names; the last before the first where there is none. */
+function monthsOf({ origin, stride, step, form }: PeriodAxis, read: PeriodText): readonly [number, number] {
   const months = stride / step.every;
-  // A text that numbers years, such as 2025/26, counts them as the record does; dates fall into the record's years.
-  const shift = yearForms.includes(read.form) ? noShift : shiftOf(step);
+  const namesYears = yearForms.includes(read.form);
+  // Which fiscal year a date falls into is known only where the record says when its years begin.
+  const isFiscal = form === "fiscal-year" || (form === "year-pair" && step.begins === undefined);
+  if (isFiscal && !namesYears) return [1, 0];
+  const shift = namesYears ? noShift : shiftOf(step);
   const placeOf = (moment: Moment): number =>
     (periodOfMonths(moment, months, shift) - Math.floor(origin / months)) / step.every;
-  return [placeOf(read.start), placeOf(read.end - 1)];
+  return [Math.ceil(placeOf(read.start) - rounding), Math.floor(placeOf(read.end - 1) + rounding)];
 }
 
 const yearForms: readonly PeriodForm[] = ["year", "year-pair", "fiscal-year"];
 
-/** First and last place, in periods, of the moments that a text names. */
-function momentsOf(axis: PeriodAxis, read: PeriodText): readonly [number, number] {
-  const byWeek = axis.calendar === "iso-week" || axis.form === "iso-week";
-  const at = byWeek ? mondayBefore : (moment: Moment): Moment => moment;
-  const placeOf = (moment: Moment): number => (at(moment) - at(axis.origin)) / axis.stride;
-  return [placeOf(read.start), placeOf(read.end - 1)];
+/** First and last period whose moment a text names; weeks are named by any day of theirs. */
+function momentsOf(axis: PeriodAxis, { start, end }: PeriodText): readonly [number, number] {
+  const { origin, stride } = axis;
+  if (axis.calendar !== "iso-week" && axis.form !== "iso-week")
+    return [
+      Math.ceil((start - origin) / stride - rounding),
+      Math.ceil((end - origin) / stride - rounding) - 1,
+    ];
+  const placeOf = (moment: Moment): number => (mondayBefore(moment) - mondayBefore(origin)) / stride;
+  return [Math.ceil(placeOf(start) - rounding), Math.floor(placeOf(end - 1) + rounding)];
 }
 
 function whole(place: number, tolerance: number): number | undefined {
@@ -110,9 +123,10 @@ function whole(place: number, tolerance: number): number | undefined {
 export function periodsAfter(axis: PeriodAxis, other: PeriodAxis): number | undefined {
   if (axis.counts !== other.counts || axis.stride !== other.stride) return undefined;
   if (axis.counts === "numbers") return whole((other.origin - axis.origin) / axis.stride, leeway);
-  const at = momentAt(other, 0);
-  const instant: PeriodText = { form: "millisecond", start: at, end: at + 1 };
-  return axis.counts === "months"
-    ? whole(monthsOf(axis, instant)[0], rounding)
-    : whole(momentsOf(axis, instant)[0], leeway);
+  return indexOf(axis, isDated(axis) && isDated(other) ? new Date(momentAt(other, 0)) : labelAt(other, 0));
+}
+
+/** Whether labels name a day or a time, and not a whole month, year or week. */
+function isDated({ counts, form, day }: PeriodAxis): boolean {
+  return counts === "moments" ? form !== "iso-week" : day !== undefined;
 }

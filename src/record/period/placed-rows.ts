@@ -8,6 +8,7 @@ import {
   calendarOf,
   isNumberedByYear,
   momentOfPair,
+  noShift,
   numberOfMoment,
 } from "./calendar.js";
 import { type Moment, monthOf } from "./moment.js";
@@ -90,7 +91,10 @@ function rowsOfDates(
   const moments = new Float64Array(column.length).fill(Number.NaN);
   for (let row = 0; row < column.length; row++)
     if (isRead(row)) moments[row] = momentAt(column[row], row, name);
-  return placed(name, calendar, form, moments, (row) => cellText(column[row]));
+  // Texts such as 2025/26 number the record's years already, whenever these begin.
+  const numbered =
+    form === "year-pair" || form === "fiscal-year" ? { ...calendar, shift: noShift } : calendar;
+  return placed(name, numbered, form, moments, (row) => cellText(column[row]));
 }
 
 function placed(
