@@ -26,6 +26,8 @@ export interface GroupFit extends EngineGroupFit, EstimatedValues {}
 /** A rule with its parameters estimated from a record; `values` and `interval` speak of its only group. */
 export interface Fit extends EngineFit, EstimatedValues {
   readonly observations: Observations;
+  /** Residual standard deviation of its only group, on the fitting scale; of groups fitted together the common one. */
+  readonly sigma: number;
   readonly groups: readonly GroupFit[];
   /** A group of the record by its name. */
   readonly group: (name: string) => GroupFit;
@@ -37,12 +39,12 @@ export function withEstimates(fit: EngineFit): Fit {
   for (const group of fit.groups) attach<EngineGroupFit, EstimatedValues>(group, ofGroup(fit, group));
   const groups = fit.groups as readonly GroupFit[];
   const shared = fit.options.groups === "combined" ? fit.population : undefined;
-  const own = <Member extends keyof EstimatedValues>(member: Member): EstimatedValues[Member] =>
+  const own = <Member extends "values" | "interval" | "sigma">(member: Member): GroupFit[Member] =>
     onlyGroup("fit", member, groups)[member];
   return attach(fit, {
     ...(shared !== undefined && groups.length > 1
-      ? ofAllGroups(fit, shared)
-      : { values: () => own("values"), interval: () => own("interval") }),
+      ? { ...ofAllGroups(fit, shared), sigma: () => groups[0]!.sigma }
+      : { values: () => own("values"), interval: () => own("interval"), sigma: () => own("sigma") }),
     group: () => (name: string) => groupNamed("fit", groups, name),
   }) as Fit;
 }

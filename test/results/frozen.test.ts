@@ -1,5 +1,6 @@
 import { describe, expect, test } from "vitest";
 import * as periodwise from "../../kernel-helpers/index.js";
+import { bundleOf } from "../../kernel-helpers/tables/index.js";
 
 const {
   attractor,
@@ -165,6 +166,14 @@ describe("every public result is frozen to its last part", () => {
   test.each(Object.entries(results))("%s", (_, ask) => {
     expect(open(ask())).toEqual([]);
   });
+
+  const plain = ["estimates", "leastSquares", "numberFormat", "points", "summary"];
+  test.each(Object.entries(results).filter(([name]) => !plain.includes(name)))(
+    "%s shows itself",
+    async (_, ask) => {
+      expect(await bundleOf(ask())).toHaveProperty("text/plain");
+    },
+  );
 
   test("no public function is left out", () => {
     const functions = Object.entries(periodwise).flatMap(([name, value]) =>
