@@ -37,7 +37,7 @@ function reachTable(found: TimeToReach, axis: PeriodAxis): Table {
   const random = found.groups.some((group) => group.paths > 1);
   const grouped: Column[] = found.groups.length > 1 ? [{ key: "who", label: "Group", kind: "text" }] : [];
   return table({
-    title: `When ${found.state} reaches ${amountWords(found)}${ruleTitle(found.rule, "by")}`,
+    title: `When ${found.state} reaches ${amountWords(found)}${ruleTitle(found.rule, "by the rule")}`,
     columns: [
       ...grouped,
       { key: "time", label: "Without random change", ...time },

@@ -7,6 +7,7 @@ import { conventionsOf } from "./options/conventions.js";
 import type { FitOptions } from "./options/fit-options.js";
 import { inputWarnings } from "./options/input-warnings.js";
 import { matchStates } from "./options/match-states.js";
+import { matchNotes, unitWarnings } from "./options/record-against-rule.js";
 import { recordWarnings } from "./options/record-warnings.js";
 import { type FitProblem, fitProblem } from "./problem/fit-problem.js";
 import { refuseMissingArgument } from "./refusals.js";
@@ -45,7 +46,7 @@ export interface Fit {
  * @throws {ModelError} `argument-missing` | `errors-not-stated` | `unknown-spread` | `bad-spread` | `factor-without-trajectory` |
  *   `robust-not-by-squares` | `rule-jumps` |
  *   `states-not-recorded` | `too-few-observations` | `no-change` | `no-logarithm` | `not-a-count` | `all-censored` |
- *   `no-finite-start` | `unknown-name` | `start-outside-bounds` | `input-not-recorded` | `input-missing-in-period`.
+ *   `no-finite-start` | `unit-scales-differ` | `unknown-name` | `start-outside-bounds` | `input-not-recorded` | `input-missing-in-period`.
  * @see Bates, D. M. and Watts, D. G. (1988), Nonlinear Regression Analysis and Its Applications, chapters 2 and 6.
  * @example
  * const crowding = recurrence("ΔN = r*N*(1 - N/K)");
@@ -57,6 +58,7 @@ export function fit(rule: Rule, observations: Observations, options: FitOptions)
   if (observations?.kind !== "observations") throw refuseMissingArgument("record");
   checkOptions(rule, options);
   const matched = matchStates(rule, observations);
+  const unitsDisagree = unitWarnings(rule, matched, options);
   const { groups, criteria, population } = fitGroups(rule, matched.groups, options);
   const fitted: Fit = {
     kind: "fit",
@@ -66,8 +68,13 @@ export function fit(rule: Rule, observations: Observations, options: FitOptions)
     groups,
     criteria,
     ...(population && { population }),
-    warnings: [...rule.findings, ...recordWarnings(matched), ...inputWarnings(rule, matched, options)],
-    conventions: conventionsOf(options, groups),
+    warnings: [
+      ...rule.findings,
+      ...unitsDisagree,
+      ...recordWarnings(matched),
+      ...inputWarnings(rule, matched, options),
+    ],
+    conventions: [...conventionsOf(options, groups), ...matchNotes(rule, observations)],
   };
   problems.set(fitted, fitProblem(fitted, fit));
   return fitted;
