@@ -9,6 +9,7 @@ import { type RuleCatalogue, shortNames } from "../../src/rule/index.js";
 import { type Figure, figure } from "../figures/index.js";
 import type { Proposal } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
+import { acrossGroup } from "./across-periods.js";
 import { caseLog } from "./case-log.js";
 import { presentFit } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
@@ -77,14 +78,14 @@ function leftOutTable(proposal: EngineProposal): Table {
 }
 
 function supportedFigure(proposal: EngineProposal): Figure {
-  const { period, states, groups } = proposal.fits[0]!.observations;
+  const { states, groups } = proposal.fits[0]!.observations;
   const [state] = states;
   const names = proposal.rows.filter((row) => row.supported);
   return figure({
     title: "The record and the rules it supports",
     panels: groups.map((group) => ({
       title: group.name,
-      x: { title: period.column, unit: period.unit },
+      x: acrossGroup(group),
       y: { title: state!.column, unit: state!.unit },
       layers: [
         ...proposal.fits.map((fit, i) => {

@@ -132,12 +132,12 @@ function noteSource({ path, rows, checksum }: RecordSource): void {
 
 /** For the rerun block: how the record was read, and each choice of the options that changed a value. */
 function noteObservations(
-  { states, period, decisions = [] }: EngineObservations,
+  { states, axis, decisions = [] }: EngineObservations,
   known: readonly Decision[],
 ): void {
   const names = states.map(({ column }) => `"${column}"`).join(", ");
   caseLog.noteStep(
-    `observations of ${names} by "${period.column}" in steps of ${period.calendar ?? `${period.step.every} ${period.step.of}`}`,
+    `observations of ${names} by "${axis.column}" in steps of ${axis.calendar ?? `${axis.step.every} ${axis.step.of}`}`,
   );
   for (const decision of decisions)
     if (!known.includes(decision)) caseLog.noteStep(`decision: ${decisionSentence(decision)}`);

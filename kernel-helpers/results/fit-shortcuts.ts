@@ -1,4 +1,9 @@
-import type { Fit as EngineFit, GroupFit as EngineGroupFit, Estimate } from "../../src/estimate/index.js";
+import {
+  type Fit as EngineFit,
+  type GroupFit as EngineGroupFit,
+  type Estimate,
+  problemOf,
+} from "../../src/estimate/index.js";
 import type { ModelError } from "../../src/numeric/index.js";
 import { attach } from "./attach.js";
 import { noIntervalError, unknownValueError } from "./errors.js";
@@ -38,7 +43,7 @@ export function withEstimates(fit: EngineFit): Fit {
   withLast(fit.observations);
   for (const group of fit.groups) attach<EngineGroupFit, EstimatedValues>(group, ofGroup(fit, group));
   const groups = fit.groups as readonly GroupFit[];
-  const shared = fit.options.groups === "combined" ? fit.population : undefined;
+  const shared = problemOf(fit).groups === "combined" ? fit.population : undefined;
   const own = <Member extends "values" | "interval" | "sigma">(member: Member): GroupFit[Member] =>
     onlyGroup("fit", member, groups)[member];
   return attach(fit, {
@@ -51,9 +56,10 @@ export function withEstimates(fit: EngineFit): Fit {
 
 type Makers = { readonly [Name in keyof EstimatedValues]: () => EstimatedValues[Name] };
 
-function ofGroup({ rule, options }: EngineFit, group: EngineGroupFit): Makers {
+function ofGroup(fit: EngineFit, group: EngineGroupFit): Makers {
+  const { rule } = fit;
   const reach = Math.max(0, ...rule.lags.map(({ lag }) => lag));
-  const given = options.errors === "observation" ? rule.states : [];
+  const given = problemOf(fit).errors === "observation" ? rule.states : [];
   const held = {
     ...group.parameters,
     ...Object.fromEntries(given.map((state) => [`${state}[${reach}]`, group.initial[state]!])),

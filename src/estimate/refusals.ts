@@ -181,11 +181,27 @@ export function refuseFactor(errors: string): ModelError {
   );
 }
 
-export function refuseResampling(): ModelError {
+export function refuseSharedParameters(): ModelError {
+  return new ModelError(
+    "groups-together",
+    "Groups that share parameters cannot be resampled one by one. Read the profile intervals of the fit, or fit them with " +
+      '`groups: "separate"`.',
+  );
+}
+
+export function refuseNoDraws(): ModelError {
+  return new ModelError(
+    "not-simulated",
+    "No records can be simulated from this fit: it has censored values, whose limits are not known for the exact ones, or " +
+      "counts with weights, which stand for no single count. Read the profile intervals of the fit.",
+  );
+}
+
+export function refuseNotBySquares(what: string): ModelError {
   return new ModelError(
     "not-by-least-squares",
-    "Records are simulated anew from fits by least squares of each group on its own. This fit was made by another likelihood, of " +
-      "groups together, or robustly: read its profiles.",
+    `${what} works on fits by least squares of each group on its own. Counts, censored values, errors in both and groups ` +
+      "together have profile intervals instead.",
   );
 }
 
@@ -224,7 +240,8 @@ export function refuseNoNewRows(): ModelError {
 export function refuseNoResiduals(): ModelError {
   return new ModelError(
     "no-residuals",
-    'A fit with errors in both has predictions, not residuals, so they cannot be drawn anew. Use bootstrap(fit, { errors: "parametric" }).',
+    "Residuals of counts, and predictions of a fit with errors in both, cannot be put on other fitted values. Use " +
+      '`errors: "parametric"`, which draws from the fitted distribution.',
   );
 }
 

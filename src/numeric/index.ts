@@ -11,7 +11,7 @@ export type { LinearisedSystem } from "./least-squares/linearised-system.js";
 export { type MinimiseOptions, type Minimum, minimiseSquares } from "./least-squares/minimise-squares.js";
 export { type SquaresWorkspace, squaresWorkspace } from "./least-squares/squares-workspace.js";
 export { ModelError } from "./model-error.js";
-export { editDistance, nearestNames } from "./nearest-names.js";
+export { didYouMean, editDistance, nearestNames } from "./nearest-names.js";
 export {
   chiSquareCdf,
   chiSquareQuantile,

@@ -24,7 +24,6 @@ export function record(
     })),
     axis: groups[0]!.axis,
     inputs: inputNames,
-    period: { column: "t", unit: "week", step: { every: 1, of: "week" } },
     order: "",
     findings: [],
     counts: { read, used: read, flagged: 0, corrected: 0, refused: 0 },

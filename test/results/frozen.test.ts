@@ -198,7 +198,7 @@ describe("what the caller holds is neither frozen nor kept", () => {
   test("steps of a record, plans of inputs, levels of bands", () => {
     const step = { every: 1, of: "hour" as const };
     const made = observations(record, { ...hourly, step });
-    expect(Object.isFrozen(made.period.step)).toBe(true);
+    expect(Object.isFrozen(made.axis.step)).toBe(true);
     const plan = { payment: [10, 10, 10, 10] };
     const bands = [0.8];
     const run = simulate(recurrence("owed[t+1] = owed - payment", { inputs: ["payment"] }), {
@@ -212,7 +212,7 @@ describe("what the caller holds is neither frozen nor kept", () => {
     step.every = 2;
     expect(run.groups[0]!.plans).toEqual({ payment: [10, 10, 10, 10] });
     expect(run.options.levels).toEqual([0.8]);
-    expect(made.period.step.every).toBe(1);
+    expect(made.axis.step.every).toBe(1);
   });
 
   test("rows of a table and lists of a figure", () => {

@@ -1,4 +1,4 @@
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import type { Rule } from "../../rule/index.js";
 import { isProbability, type Measure, measureWords } from "../measure/measure.js";
 import { measureReader } from "../measure/read-measure.js";
@@ -87,7 +87,7 @@ function rangeable(
   if (between === undefined) return {};
   const [from, to] = between;
   const own = isFit(subject) ? subject.rule : subject;
-  const bounds = (isFit(subject) ? subject.options.bounds?.[unknown] : undefined) ?? own.bounds[unknown];
+  const bounds = isFit(subject) ? problemOf(subject).bounds(unknown) : own.bounds[unknown];
   if (!(from < to)) throw refuseBounds(unknown, from, to, "the first must be the smaller one");
   if (bounds !== undefined && (to < bounds[0] || from > bounds[1]))
     throw refuseBounds(unknown, from, to, `the rule admits ${bounds[0]} to ${bounds[1]}`);

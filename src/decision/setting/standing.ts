@@ -9,19 +9,13 @@ import {
   runStart,
   type StartOptions,
 } from "../../dynamics/index.js";
-import type { Fit } from "../../estimate/index.js";
-import {
-  type FitGround,
-  fitGround,
-  fittedNoise,
-  type Ground,
-  type Noise,
-  ruleNoise,
-} from "../../projection/index.js";
-import type { PeriodAxis } from "../../record/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
+import { type FitGround, fitGround, type Ground, type Noise, ruleNoise } from "../../projection/index.js";
+import { labelBetween, type PeriodAxis } from "../../record/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../../rule/index.js";
 import type { MeasureUnits } from "../measure/measure.js";
 import { refuseGroup } from "../refusals.js";
+import { plain } from "../words/amount.js";
 
 /** What a decision is worked out from, beside the rule or fit itself. */
 export interface StandingOptions extends StartOptions {
@@ -52,6 +46,8 @@ export interface Standing extends MeasureUnits {
   /** Row of the path that is the present; what is ahead begins one row later. */
   readonly present: number;
   readonly axis: PeriodAxis;
+  /** Time of period 0 of the axis, in the period column's unit. */
+  readonly zero: number;
   /** The period column's value at a row. */
   readonly timeAt: (row: number) => number;
   readonly change: readonly (Noise | undefined)[];
@@ -93,8 +89,10 @@ function fitStanding(fit: Fit, options: StandingOptions): Standing {
     fitGround: ground,
     present: ground.recordEnd - ground.from,
     axis,
+    zero: first,
     timeAt: (row) => first + (ground.from + row) * axis.step.every,
-    change: fittedNoise(fit, group).change,
+    timeWords: timeWordsOf(axis, first),
+    change: problemOf(fit).group(group.group).noise.change,
     plans,
     paths: options.paths ?? 2000,
     seed: options.seed ?? 1,
@@ -126,7 +124,9 @@ function ruleStanding(rule: Rule, options: StandingOptions): Standing {
     fitGround: undefined,
     present: 0,
     axis,
+    zero: first,
     timeAt: (row) => first + (from + row) * axis.step.every,
+    timeWords: timeWordsOf(axis, first),
     change: ruleNoise(rule, parameters, options.noise),
     plans: options.inputs ?? {},
     paths: options.paths ?? 2000,
@@ -135,4 +135,10 @@ function ruleStanding(rule: Rule, options: StandingOptions): Standing {
     unitOf: (name) => rule.units[stateOf(name)] ?? "",
     periodUnit: axis.unit,
   };
+}
+
+/** A time of the period column in a sentence; `zero` is that of period 0. */
+function timeWordsOf(axis: PeriodAxis, zero: number): (time: number) => string {
+  if (axis.counts === "numbers") return (time) => `${axis.unit} ${plain(time, 5)}`;
+  return (time) => labelBetween(axis, 0, (time - zero) / axis.step.every);
 }

@@ -1,4 +1,4 @@
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import { chiSquareCdf } from "../../numeric/index.js";
 import { nestingOf } from "./nesting.js";
 
@@ -31,11 +31,17 @@ export function likelihoodRatios(
 ): readonly LikelihoodRatio[] {
   return fits.flatMap((smaller, s) =>
     fits.flatMap((larger, l) => {
-      if (smaller === larger || smaller.options.distribution !== larger.options.distribution) return [];
+      if (smaller === larger || !areLike(smaller, larger)) return [];
       const nesting = nestingOf(smaller, larger);
       return nesting ? [ratioOf(smaller, larger, [labels[s]!, labels[l]!], nesting.at)] : [];
     }),
   );
+}
+
+/** Whether two fits take groups and errors alike, so that only their rules differ. */
+function areLike(one: Fit, other: Fit): boolean {
+  const [a, b] = [problemOf(one), problemOf(other)];
+  return a.distribution === b.distribution && a.groups === b.groups;
 }
 
 function ratioOf(
@@ -44,13 +50,10 @@ function ratioOf(
   names: readonly [string, string],
   at: Readonly<Record<string, number>>,
 ): LikelihoodRatio {
-  const total = (fit: Fit): number =>
-    fit.groups.reduce((sum, group) => sum + group.criteria.logLikelihood, 0);
-  const statistic = Math.max(0, 2 * (total(larger) - total(smaller)));
-  const extra = Object.keys(at);
-  const degreesOfFreedom = extra.length * larger.groups.length;
-  const bounds = { ...larger.rule.bounds, ...larger.options.bounds };
-  const edge = extra.filter((name) => bounds[name]?.includes(at[name]!));
+  const statistic = Math.max(0, 2 * (larger.criteria.logLikelihood - smaller.criteria.logLikelihood));
+  const degreesOfFreedom = larger.criteria.counted - smaller.criteria.counted;
+  const { bounds } = problemOf(larger);
+  const edge = Object.keys(at).filter((name) => bounds(name).includes(at[name]!));
   const probability = edge.length > 0 ? undefined : 1 - chiSquareCdf(statistic, degreesOfFreedom);
   const base = {
     smaller: names[0],

@@ -32,6 +32,7 @@ export function joined(record: Observations, later: Observations): Observations 
         message: `Of the rows added: ${finding.message}`,
       })),
     ],
+    ...decisionsOf(record, later, rowsBefore),
     counts: {
       ...record.counts,
       read: sum("read"),
@@ -41,6 +42,19 @@ export function joined(record: Observations, later: Observations): Observations 
       refused: sum("refused"),
     },
   };
+}
+
+function decisionsOf(
+  record: Observations,
+  later: Observations,
+  rowsBefore: number,
+): Pick<Observations, "decisions"> {
+  const { decisions = [] } = later;
+  const all = [
+    ...(record.decisions ?? []),
+    ...decisions.map((each) => ({ ...each, row: each.row + rowsBefore })),
+  ];
+  return all.length === 0 ? {} : { decisions: all };
 }
 
 function joinedGroup(group: ObservedGroup, later: ObservedGroup, rowsBefore: number): ObservedGroup {
