@@ -73,7 +73,7 @@ describe("the wire", () => {
 
   test("refuses a signature scheme that cannot be computed", () => {
     expect(() => signatureOf("key", "hmac-nothing")).toThrowErrorMatchingInlineSnapshot(
-      `[KernelError: The connection file asks for the signature scheme "hmac-nothing", which this Node cannot compute. Use "hmac-sha256".]`,
+      `[KernelError: The connection file has the signature scheme "hmac-nothing", which Node does not support. Use "hmac-sha256".]`,
     );
   });
 });
