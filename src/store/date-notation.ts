@@ -1,4 +1,4 @@
-/** Order in which a date is written with numbers. */
+/** Order of day and month in a date written with numbers. */
 export type DateOrder = "day-month-year" | "month-day-year";
 
 const numeric = /^(\d{1,2})([/.-])(\d{1,2})\2(\d{4})(?:[T ]+(\d{1,2}:\d{2}(?::\d{2})?))?$/;
@@ -6,8 +6,8 @@ const yearFirst = /^(\d{4})[/.](\d{1,2})[/.](\d{1,2})(?:[T ]+(\d{1,2}:\d{2}(?::\
 const named = /^(\d{1,2})[ -]([a-z]{3})[a-z]*[ -](\d{4})$/i;
 const monthNames = ["jan", "feb", "mar", "apr", "may", "jun", "jul", "aug", "sep", "oct", "nov", "dec"];
 
-/** Which orders a date written with numbers can have; both when it does not show; undefined for no such date. */
-export function dateOrdersOf(cell: string): readonly DateOrder[] | undefined {
+/** Possible orders of a date written with numbers: both when ambiguous; undefined when it is not such a date. */
+export function possibleDateOrders(cell: string): readonly DateOrder[] | undefined {
   const found = numeric.exec(cell.trim());
   if (found === null) return undefined;
   const [first, second] = [Number(found[1]), Number(found[3])];
@@ -17,24 +17,24 @@ export function dateOrdersOf(cell: string): readonly DateOrder[] | undefined {
   return orders.length === 0 ? undefined : orders;
 }
 
-/** The date in the form 2026-03-31 (with its time, if it has one), or undefined when it is none in this order. */
+/** The date as 2026-03-31 (with its time, if it has one); undefined when it is not a date in this order. */
 export function isoDate(cell: string, order: DateOrder): string | undefined {
   const found = numeric.exec(cell.trim());
-  if (found === null || !dateOrdersOf(cell)?.includes(order)) return undefined;
+  if (found === null || !possibleDateOrders(cell)?.includes(order)) return undefined;
   const [day, month] = order === "day-month-year" ? [found[1]!, found[3]!] : [found[3]!, found[1]!];
-  return joined(found[4]!, month, day, found[5]);
+  return isoText(found[4]!, month, day, found[5]);
 }
 
-/** The date in the form 2026-03-31 of a cell that can be read in one way: 2026/3/31 or 31 Mar 2026. */
-export function plainDate(cell: string): string | undefined {
+/** The date as 2026-03-31 of a cell that can be read in one way only: 2026/3/31 or 31 Mar 2026. */
+export function unambiguousDate(cell: string): string | undefined {
   const first = yearFirst.exec(cell.trim());
-  if (first !== null) return joined(first[1]!, first[2]!, first[3]!, first[4]);
-  const spelt = named.exec(cell.trim());
-  const month = spelt === null ? -1 : monthNames.indexOf(spelt[2]!.toLowerCase());
-  return month < 0 ? undefined : joined(spelt![3]!, String(month + 1), spelt![1]!, undefined);
+  if (first !== null) return isoText(first[1]!, first[2]!, first[3]!, first[4]);
+  const spelledOut = named.exec(cell.trim());
+  const month = spelledOut === null ? -1 : monthNames.indexOf(spelledOut[2]!.toLowerCase());
+  return month < 0 ? undefined : isoText(spelledOut![3]!, String(month + 1), spelledOut![1]!, undefined);
 }
 
-function joined(year: string, month: string, day: string, time: string | undefined): string {
+function isoText(year: string, month: string, day: string, time: string | undefined): string {
   const date = `${year}-${month.padStart(2, "0")}-${day.padStart(2, "0")}`;
   return time === undefined
     ? date

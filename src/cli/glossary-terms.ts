@@ -1,8 +1,8 @@
 import { termOf, terms } from "../../kernel-helpers/glossary/index.js";
 import type { StringLanguage } from "../kernel/index.js";
 
-/** Help inside `explain("...")`: the terms that are explained. */
-export const tradeTerms: StringLanguage = {
+/** Completion and help inside `explain("...")`. */
+export const glossaryTerms: StringLanguage = {
   matches: (callee, argument) => argument === 0 && /(^|\.)explain$/.test(callee),
   complete: (text, position) => {
     const begun = text.slice(0, position).trimStart().toLowerCase();
@@ -11,6 +11,6 @@ export const tradeTerms: StringLanguage = {
     return { start: 0, end: text.length, items: items.map((name) => ({ text: name, kind: "term" })) };
   },
   inspect: (text) => termOf(text)?.meaning,
-  // An unknown term is refused by the command itself, with the nearest ones.
+  // An unknown term is rejected by the function itself, with the nearest ones.
   check: () => [],
 };

@@ -34,8 +34,8 @@ function workbook(name: string, sheets: Record<string, workbooks.WorkSheet>): vo
   writeFileSync(at(name), workbooks.write(book, { type: "buffer", bookType: "xlsx" }) as Buffer);
 }
 
-describe("a wrong ending", () => {
-  test("is seen through where the contents say what they are, and told", async () => {
+describe("a wrong file extension", () => {
+  test("is ignored when the contents show the format, and a note says so", async () => {
     await writeTables([record], at("record.parquet"));
     await writeTables([record], at("record.xlsx"));
     for (const [from, format] of [
@@ -45,29 +45,33 @@ describe("a wrong ending", () => {
       writeFileSync(at("lie.csv"), readFileSync(at(from)));
       const table = await readTable(at("lie.csv"));
       expect(Array.from(table.columns[0]!)).toEqual([1, 2]);
-      expect(table.source.found[0]).toBe(`The file is ${format} by its contents, whatever its name says.`);
-    }
-  });
-
-  test("is refused where text poses as a workbook, Parquet or a database", async () => {
-    for (const ending of ["xlsx", "parquet", "duckdb"]) {
-      writeFileSync(at(`text.${ending}`), "week,item\n1,rope\n");
-      expect(await refused(`text.${ending}`)).toMatch(
-        /^unreadable-file: ".*" could not be read as .*: its first bytes are of no such file\./,
+      expect(table.source.found[0]).toBe(
+        `The file is read as ${format}: its contents do not match its extension.`,
       );
     }
   });
 
-  test("that says nothing is asked about, and a folder is no file", async () => {
+  test("is rejected when a text file is named as a workbook, Parquet or a database", async () => {
+    for (const ending of ["xlsx", "parquet", "duckdb"]) {
+      writeFileSync(at(`text.${ending}`), "week,item\n1,rope\n");
+      expect(await refused(`text.${ending}`)).toMatch(
+        /^unreadable-file: Cannot read ".*" as .*: it does not start like a file of this format\./,
+      );
+    }
+  });
+
+  test("that is unknown asks for the format, and a folder is rejected", async () => {
     writeFileSync(at("record.dat"), "week,item\n1,rope\n");
-    expect(await refused("record.dat")).toMatch(/^format-unknown: .* Say format: one of "csv", "tsv"/);
+    expect(await refused("record.dat")).toMatch(
+      /^format-unknown: Unknown file extension "\.dat" in ".*"\. Give `format`: "csv", "tsv"/,
+    );
     expect(await columns("record.dat", { format: "csv" })).toEqual({ week: [1], item: ["rope"] });
-    expect(await refused("")).toMatch(/^unreadable-file: .*it is a folder/);
+    expect(await refused("")).toMatch(/^unreadable-file: .* is a folder\./);
   });
 });
 
 describe("a broken file", () => {
-  test("cut off in the middle is refused, whatever it is", async () => {
+  test("that is truncated is rejected in every format", async () => {
     const long = { name: "record", table: tableOf({ week: Array.from({ length: 5000 }, (_, i) => i) }) };
     for (const ending of ["parquet", "xlsx", "duckdb"]) {
       await writeTables([long], at(`whole.${ending}`));
@@ -76,21 +80,21 @@ describe("a broken file", () => {
       expect(await refused(`cut.${ending}`)).toMatch(/^(unreadable-file|no-data-rows|table-unclear): /);
     }
     writeFileSync(at("cut.json"), '[{"week": 1}, {"we');
-    expect(await refused("cut.json")).toMatch(/^unreadable-file: .* could not be read as JSON/);
+    expect(await refused("cut.json")).toMatch(/^unreadable-file: Cannot read .* as JSON/);
   });
 
-  test("of JSON that is no record is refused", async () => {
+  test("of JSON that is not a record is rejected", async () => {
     for (const text of ["3", "[1, 2]", '{"a": 1}', '{"a": [1], "b": [1, 2]}']) {
       writeFileSync(at("other.json"), text);
       expect(await refused("other.json")).toContain(
-        "it is neither rows as objects nor columns of equal length",
+        "it contains neither an array of row objects nor columns of equal length",
       );
     }
   });
 });
 
 describe("JSON", () => {
-  test("is read as rows, as columns, and as a row a line", async () => {
+  test("is read as rows, as columns, and as one row per line", async () => {
     const expected = { week: [1, 2], item: ["rope", null] };
     const texts = [
       '[{"week": 1, "item": "rope"}, {"week": 2}]',
@@ -113,7 +117,7 @@ describe("JSON", () => {
 });
 
 describe("a workbook", () => {
-  test("gives the saved values of formula cells, and says that they are formulas", async () => {
+  test("gives the saved values of formulas, and says so", async () => {
     const sheet = workbooks.utils.aoa_to_sheet([
       ["week", "stock"],
       [1, 90],
@@ -123,12 +127,10 @@ describe("a workbook", () => {
     workbook("formulas.xlsx", { stock: sheet });
     const table = await readTable(at("formulas.xlsx"));
     expect(Array.from(table.columns[1]!)).toEqual([90, 83]);
-    expect(table.source.found).toEqual([
-      'In "stock" 1 cells are formulas; the values saved with the file are read.',
-    ]);
+    expect(table.source.found).toEqual(['Column "stock": read the saved value of 1 formula.']);
   });
 
-  test("keeps a text that begins with = as text, both ways", async () => {
+  test("keeps a text that starts with = as text, written and read", async () => {
     const text = '=HYPERLINK("x")';
     await writeTables([{ name: "record", table: tableOf({ week: [1], note: [text] }) }], at("text.xlsx"));
     expect(await columns("text.xlsx")).toEqual({ week: [1], note: [text] });
@@ -139,7 +141,7 @@ describe("a workbook", () => {
   });
 
   // Day numbers: 45382 is 2024-03-31 in the 1900 system (ECMA-376 part 1, 18.17.4.1); 0.5 is noon.
-  test("gives dates as ISO text, with the time where there is one", async () => {
+  test("gives dates as ISO text, with the time if there is one", async () => {
     const sheet = workbooks.utils.aoa_to_sheet([
       ["date", "owed"],
       [0, 300],
@@ -154,7 +156,7 @@ describe("a workbook", () => {
     });
   });
 
-  test("keeps an error of a cell as its text", async () => {
+  test("keeps a cell error as text", async () => {
     const sheet = workbooks.utils.aoa_to_sheet([
       ["week", "stock"],
       [1, 90],
@@ -165,10 +167,10 @@ describe("a workbook", () => {
     expect(await columns("errors.xlsx")).toEqual({ week: [1, 2], stock: [90, "#N/A"] });
   });
 
-  test("with several sheets asks which", async () => {
+  test("with several sheets asks for one", async () => {
     await writeTables([record, { ...record, name: "other" }], at("two.xlsx"));
     expect(await refused("two.xlsx")).toMatch(
-      /^table-unclear: .* holds several tables: "record", "other"\. Say which one to read, for example table: "record"\./,
+      /^table-unclear: .* has several tables: "record" and "other"\. Choose one, such as table: "record"\./,
     );
     expect(await refused("two.xlsx", { table: "third" })).toMatch(/^no-such-table: /);
     expect(await columns("two.xlsx", { table: "other" })).toEqual({ week: [1, 2], item: ["rope", "tar"] });
@@ -176,7 +178,7 @@ describe("a workbook", () => {
 });
 
 describe("a database file", () => {
-  test("keeps its other tables when one is written, and asks which to read", async () => {
+  test("keeps its other tables when one is written, and asks for the one to read", async () => {
     await writeTables([record], at("store.duckdb"));
     await writeTables([{ name: "second", table: tableOf({ week: [3] }) }], at("store.duckdb"));
     expect(await refused("store.duckdb")).toMatch(/^table-unclear: /);
@@ -189,25 +191,25 @@ describe("a database file", () => {
 });
 
 describe("writing", () => {
-  test("leaves the file that was there when it fails", async () => {
+  test("keeps the previous file when it fails", async () => {
     await writeTables([record], at("kept.json"));
     const before = readFileSync(at("kept.json"), "utf8");
     const infinite = { name: "record", table: tableOf({ week: [Number.POSITIVE_INFINITY] }) };
     await expect(writeTables([infinite], at("kept.json"))).rejects.toThrow(
-      "JSON has no infinite number (row 1, week)",
+      "JSON cannot represent infinity (row 1, week)",
     );
     expect(readFileSync(at("kept.json"), "utf8")).toBe(before);
   });
 
-  test("refuses two tables for one text file, columns that a database cannot tell apart, and folders that are not there", async () => {
+  test("rejects two tables for one text file, column names that differ only in case, and missing folders", async () => {
     await expect(writeTables([record, record], at("two.csv"))).rejects.toThrow(
-      "there are 2 tables and the file holds one",
+      "there are 2 tables, and this format holds one",
     );
     const alike = { name: "record", table: tableOf({ Week: [1], week: [2] }) };
     await expect(writeTables([alike], at("alike.parquet"))).rejects.toThrow(
-      'the columns "Week" and "week" differ in no letter but its case',
+      'the columns "Week" and "week" differ only in case',
     );
     await expect(writeTables([record], at("none/record.csv"))).rejects.toThrow("its folder does not exist");
-    await expect(writeTables([record], at("record.dat"))).rejects.toThrow("does not say by its ending");
+    await expect(writeTables([record], at("record.dat"))).rejects.toThrow('Unknown file extension ".dat"');
   });
 });

@@ -1,25 +1,25 @@
-import type { PlaceFinder } from "./source-places.js";
+import type { PositionMapper } from "./source-positions.js";
 
 /** A text that code was compiled from: a cell, or a file beside the notebook. */
 export interface Source {
   /** The name that stack traces carry. */
   readonly name: string;
-  /** What a person calls it: "cell 3", "rates.ts". */
+  /** Name for the reader: "cell 3", "rates.ts". */
   readonly label: string;
   /** The text of a cell. */
   readonly text?: string;
-  /** The path of a file, whose text is read when it is needed. */
+  /** The path of a file; its text is read when needed. */
   readonly file?: string;
-  readonly findPlace: PlaceFinder | undefined;
+  readonly mapPosition: PositionMapper | undefined;
 }
 
-/** Every text compiled so far, by the name in stack traces: functions outlive the cell that made them. */
-export interface SourceRegister {
+/** Every text compiled so far, by its name in stack traces: functions outlive the cell that defined them. */
+export interface SourceRegistry {
   readonly add: (source: Source) => void;
   readonly find: (name: string) => Source | undefined;
 }
 
-export function sourceRegister(): SourceRegister {
+export function sourceRegistry(): SourceRegistry {
   const sources = new Map<string, Source>();
   return {
     add: (source) => void sources.set(source.name, source),

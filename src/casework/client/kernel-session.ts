@@ -1,10 +1,10 @@
 import type { Message } from "../../kernel/index.js";
-import { kernelSilent } from "../refusals.js";
+import { kernelSilentError } from "../errors.js";
 import { type KernelClient, kernelClient } from "./kernel-client.js";
 import { type KernelCommand, startKernelProcess } from "./kernel-process.js";
 
-/** A kernel of our own, ready to be asked. */
-export interface Conversation {
+/** A running kernel that accepts requests. */
+export interface KernelSession {
   readonly request: (
     type: string,
     content: object,
@@ -14,11 +14,11 @@ export interface Conversation {
   readonly end: () => Promise<void>;
 }
 
-const askAgainMs = 50;
-const patienceMs = 60_000;
+const retryMs = 50;
+const startTimeoutMs = 60_000;
 
-/** Starts a kernel and waits until both its replies and its outputs arrive here. */
-export async function converse(command: KernelCommand, folder: string): Promise<Conversation> {
+/** Starts a kernel and waits until both its replies and its outputs arrive. */
+export async function startKernelSession(command: KernelCommand, folder: string): Promise<KernelSession> {
   const process = await startKernelProcess(command, folder);
   const client = kernelClient(process.connection);
   const end = async (): Promise<void> => {
@@ -27,26 +27,27 @@ export async function converse(command: KernelCommand, folder: string): Promise<
     await client.close();
   };
   try {
-    await Promise.race([ready(client), process.ended]);
+    await Promise.race([untilReady(client), process.ended]);
   } catch (cause) {
     process.child.kill("SIGKILL");
     await end();
     throw cause;
   }
   return {
-    request: (type, content, onOutput) => Promise.race([ask(client, type, content, onOutput), process.ended]),
+    request: (type, content, onOutput) =>
+      Promise.race([sendRequest(client, type, content, onOutput), process.ended]),
     interrupt: () => void client.send("control", "interrupt_request", {}),
     end,
   };
 }
 
-/** Asks for kernel info until both the reply and an iopub message came: a subscription takes a moment. */
-function ready(client: KernelClient): Promise<void> {
+/** Requests kernel info until both a reply and an iopub message have arrived: a subscription takes a moment. */
+function untilReady(client: KernelClient): Promise<void> {
   return new Promise((resolve, reject) => {
-    const heard = new Set<string>();
-    const ask = (): string => client.send("shell", "kernel_info_request", {});
-    const timer = setInterval(ask, askAgainMs);
-    const deadline = setTimeout(() => finish(kernelSilent(patienceMs / 1_000)), patienceMs);
+    const channels = new Set<string>();
+    const sendRequest = (): string => client.send("shell", "kernel_info_request", {});
+    const timer = setInterval(sendRequest, retryMs);
+    const deadline = setTimeout(() => finish(kernelSilentError(startTimeoutMs / 1_000)), startTimeoutMs);
     const finish = (cause?: Error): void => {
       clearInterval(timer);
       clearTimeout(deadline);
@@ -54,24 +55,24 @@ function ready(client: KernelClient): Promise<void> {
       if (cause) reject(cause);
       else resolve();
     };
-    const stop = client.hear((channel) => {
-      heard.add(channel);
-      if (heard.has("shell") && heard.has("iopub")) finish();
+    const stop = client.listen((channel) => {
+      channels.add(channel);
+      if (channels.has("shell") && channels.has("iopub")) finish();
     });
-    ask();
+    sendRequest();
   });
 }
 
-function ask(
+function sendRequest(
   client: KernelClient,
   type: string,
   content: object,
   onOutput: (message: Message) => void = () => undefined,
 ): Promise<Message> {
   return new Promise((resolve) => {
-    const replyTo = finishedReply(client.send("shell", type, content));
-    const stop = client.hear((channel, message) => {
-      // Outputs are passed on whoever they belong to: a display of an earlier cell may be replaced now.
+    const replyTo = replyWhenIdle(client.send("shell", type, content));
+    const stop = client.listen((channel, message) => {
+      // Outputs of every cell are passed on: a display of an earlier cell may be replaced now.
       if (channel === "iopub") onOutput(message);
       const reply = replyTo(message);
       if (reply === undefined) return;
@@ -81,8 +82,8 @@ function ask(
   });
 }
 
-/** Takes messages and gives the reply to a request once the kernel has also said that it is idle. */
-function finishedReply(id: string): (message: Message) => Message | undefined {
+/** Returns the reply to a request once the kernel is also idle again. */
+function replyWhenIdle(id: string): (message: Message) => Message | undefined {
   let reply: Message | undefined;
   let idle = false;
   return (message) => {

@@ -1,25 +1,25 @@
 import Module from "node:module";
 import { basename } from "node:path";
-import type { OwnPackage } from "./installation.js";
+import type { BundledPackage } from "./installation.js";
 
 interface ModuleInternals {
   _resolveFilename(request: string, ...rest: unknown[]): string;
   _load(request: string, parent: { filename?: string | null } | undefined, ...rest: unknown[]): unknown;
 }
 
-/** Modules that were loaded ahead for cells, by the name that cells import them by. */
+/** Modules loaded before a cell runs, by the name under which cells import them. */
 export type Preloaded = Map<string, unknown>;
 
 /**
- * Lets every `require` in this process find the kernel's own packages by name, and lets cells and the files
- * beside the notebook find what was loaded ahead for them.
+ * Lets every `require` in this process find the bundled packages by name, and lets cells and the files beside the
+ * notebook find the preloaded modules.
  */
-export function installOwnModules(
+export function installBundledModules(
   folder: string,
-  packages: readonly OwnPackage[],
+  packages: readonly BundledPackage[],
   preloaded: Preloaded,
 ): void {
-  // Node has no public door for this; both functions have kept their shape since Node 4.
+  // Node has no public interface for this; both functions have had the same signature since Node 4.
   const internals = Module as unknown as ModuleInternals;
   const resolve = internals._resolveFilename;
   const load = internals._load;
@@ -28,12 +28,12 @@ export function installOwnModules(
     return programs.get(request) ?? resolve.call(this, request, ...rest);
   };
   internals._load = function (request, parent, ...rest) {
-    if (preloaded.has(request) && isOfNotebook(folder, parent?.filename)) return preloaded.get(request);
+    if (preloaded.has(request) && isBesideNotebook(folder, parent?.filename)) return preloaded.get(request);
     return load.call(this, request, parent, ...rest);
   };
 }
 
-function isOfNotebook(folder: string, filename: string | null | undefined): boolean {
+function isBesideNotebook(folder: string, filename: string | null | undefined): boolean {
   if (!filename?.startsWith(folder)) return false;
   return !filename.slice(folder.length).includes("node_modules") && basename(filename) !== "node_modules";
 }

@@ -1,7 +1,7 @@
 import { extname } from "node:path";
 import type { Format } from "./read-options.js";
 
-const endings: ReadonlyMap<string, Format> = new Map<string, Format>([
+const extensions: ReadonlyMap<string, Format> = new Map<string, Format>([
   [".csv", "csv"],
   [".txt", "csv"],
   [".tsv", "tsv"],
@@ -17,7 +17,7 @@ const endings: ReadonlyMap<string, Format> = new Map<string, Format>([
   [".ddb", "duckdb"],
 ]);
 
-/** What the ending of a file's name says it holds. */
-export function formatOfEnding(path: string): Format | undefined {
-  return endings.get(extname(path).toLowerCase());
+/** The format that a file extension stands for. */
+export function formatOfExtension(path: string): Format | undefined {
+  return extensions.get(extname(path).toLowerCase());
 }

@@ -1,16 +1,16 @@
 import type { Message } from "../../kernel/index.js";
 import type { Output } from "./notebook.js";
 
-/** Gathers what cells show, as a front end would keep it. */
-export interface OutputRecord {
-  /** Takes an iopub message, whichever cell it belongs to. */
-  readonly take: (message: Message) => void;
-  /** Messages whose parent is this request belong to the cell of this name. */
-  readonly belongs: (requestId: string, cell: string) => void;
+/** Collects the outputs of cells as a front end would store them. */
+export interface OutputCollector {
+  /** Adds an iopub message of any cell. */
+  readonly add: (message: Message) => void;
+  /** Assigns the messages of a request to a cell. */
+  readonly assign: (requestId: string, cell: string) => void;
   readonly outputsOf: (cell: string) => readonly Output[];
 }
 
-interface Kept {
+interface StoredOutput {
   output: Output;
   readonly displayId: string | undefined;
 }
@@ -18,11 +18,11 @@ interface Kept {
 type Content = Readonly<Record<string, unknown>>;
 
 /**
- * Neighbouring pieces of one stream become one output, an updated display replaces every earlier one of its
- * name, and a waiting clear happens with the next output.
+ * Consecutive chunks of one stream become one output, an updated display replaces every earlier one with its id, and a
+ * deferred clear happens with the next output.
  */
-export function outputRecord(): OutputRecord {
-  const cells = new Map<string, Kept[]>();
+export function outputCollector(): OutputCollector {
+  const cells = new Map<string, StoredOutput[]>();
   const owners = new Map<string, string>();
   const clearing = new Set<string>();
 
@@ -44,9 +44,9 @@ export function outputRecord(): OutputRecord {
   };
 
   return {
-    belongs: (requestId, cell) => void owners.set(requestId, cell),
+    assign: (requestId, cell) => void owners.set(requestId, cell),
     outputsOf: (cell) => (cells.get(cell) ?? []).map(({ output }) => output),
-    take: ({ header, parent, content }) => {
+    add: ({ header, parent, content }) => {
       const cell = owners.get(parent.msg_id ?? "");
       if (header.msg_type === "update_display_data") replace(content);
       if (cell === undefined) return;
@@ -58,7 +58,7 @@ export function outputRecord(): OutputRecord {
   };
 }
 
-/** The stored form of a message, without what is only for the moment (`transient`). */
+/** The stored form of a message, without its transient data. */
 function storedOutput(type: string, content: Content): Output | undefined {
   const { data, metadata = {}, name, text, execution_count, ename, evalue, traceback } = content;
   if (type === "stream") return { output_type: type, name, text };

@@ -1,15 +1,15 @@
 import { createHash } from "node:crypto";
 import { createReadStream } from "node:fs";
 
-/** What one pass over the bytes of a file tells. */
-export interface FileScan {
+/** Checksum and size of a file. */
+export interface FileChecksum {
   /** SHA-256, hexadecimal. */
   readonly checksum: string;
   readonly bytes: number;
 }
 
-/** Reads a file once, in pieces, for its checksum. */
-export async function scanFile(path: string): Promise<FileScan> {
+/** Computes the checksum of a file in one pass. */
+export async function fileChecksum(path: string): Promise<FileChecksum> {
   const hash = createHash("sha256");
   let bytes = 0;
   for await (const piece of createReadStream(path, { highWaterMark: 1 << 20 }) as AsyncIterable<Buffer>) {

@@ -9,8 +9,8 @@ import {
 import { catalogueTexts } from "./catalogue-texts.js";
 import { wordAt } from "./word-at.js";
 
-/** Help inside the text of `recurrence("...")`: its own names, functions and words, rules of the catalogue, mistakes. */
-export const ruleText: StringLanguage = {
+/** Completion, help and errors inside the text of `recurrence("...")`. */
+export const ruleTextLanguage: StringLanguage = {
   matches: (callee, argument) => argument === 0 && /(^|\.)recurrence$/.test(callee),
   complete: (text, position) => {
     if (/^\s*[a-z]*$/i.test(text)) return wholeRules(text);
@@ -23,11 +23,11 @@ export const ruleText: StringLanguage = {
     const options = declared(given);
     if (options === undefined) return [];
     const failed = attempt(text, options);
-    return failed instanceof Error ? [complaint(failed, text)] : [];
+    return failed instanceof Error ? [diagnostic(failed, text)] : [];
   },
 };
 
-/** A text that is empty, or one word, may become a rule of the catalogue. */
+/** An empty text, or a single word, can be completed to a catalogue rule. */
 function wholeRules(text: string): ReturnType<StringLanguage["complete"]> {
   const begun = text.trim().toLowerCase();
   const fitting = catalogueTexts().filter(({ name }) => name.toLowerCase().startsWith(begun));
@@ -40,7 +40,7 @@ function aboutWhole(text: string): string | undefined {
   return rule && `**${rule.title}** (\`rules.${rule.name}()\`)\n\n${rule.remarks}`;
 }
 
-/** The options that decide what a name is; `undefined` when the cell computes them. */
+/** The options that decide the role of a name; `undefined` when they are computed in the cell. */
 function declared(given: unknown): RecurrenceOptions | undefined {
   if (given === undefined) return {};
   if (typeof given !== "object" || given === null) return undefined;
@@ -56,12 +56,12 @@ function attempt(text: string, options: RecurrenceOptions): Rule | Error {
   }
 }
 
-function complaint(error: Error, text: string): { start: number; end: number; text: string } {
+function diagnostic(error: Error, text: string): { start: number; end: number; text: string } {
   const { start, end } = (Reflect.get(error, "facts") ?? {}) as {
     readonly start?: number;
     readonly end?: number;
   };
-  // The message shows the place too; here the cell does.
+  // The message has an excerpt with carets; here the cell itself is marked.
   const [wrong = error.message, ...rest] = error.message.split("\n");
   const remedy = rest.filter((line) => !line.startsWith("    "));
   return { start: start ?? 0, end: end ?? text.length, text: [wrong, ...remedy].join(" ") };
@@ -75,7 +75,7 @@ function languageOf(text: string): RuleLanguage {
 function offers(text: string, present: string): readonly StringCompletion[] {
   const { functions, words, names } = languageOf(text);
   const known = new Set([...functions, ...words, ...names].map(({ name }) => name));
-  // A text that is being typed does not read as a rule; its words are its names then.
+  // A text that is being typed may not be a valid rule; then its words are its names.
   const typed = [...text.matchAll(/[\p{L}_][\p{L}\p{N}_]*/gu)].map(([name]) => name.replace(/^Δ/, ""));
   const others = new Set(typed.filter((name) => name !== present && name !== "" && !known.has(name)));
   return [

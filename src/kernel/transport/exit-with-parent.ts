@@ -1,16 +1,16 @@
 const everyMs = 1_000;
 
 /**
- * Watches the program that started this kernel and calls `leave` once it is gone, so that a front end that was
- * killed leaves no kernel behind. The client names itself in JPY_PARENT_PID; without it nothing is watched.
+ * Watches the process that started this kernel and calls `exit` once it is gone, so that a killed front end leaves no
+ * kernel behind. The client gives its id in JPY_PARENT_PID; without it nothing is watched.
  */
-export function leaveWithParent(leave: () => void): void {
+export function exitWithParent(exit: () => void): void {
   const parent = Number(process.env["JPY_PARENT_PID"]);
   if (process.platform === "win32" || !Number.isInteger(parent) || parent <= 1) return;
   const timer = setInterval(() => {
     if (isAlive(parent)) return;
     clearInterval(timer);
-    leave();
+    exit();
   }, everyMs);
   timer.unref();
 }
