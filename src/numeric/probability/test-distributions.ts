@@ -21,6 +21,11 @@ export function fQuantile(probability: number, numerator: number, denominator: n
   return fShape(numerator, denominator).at({ lower: probability, upper: 1 - probability });
 }
 
+/** Probability that an F value is at most `value`, with all its digits where it is small. */
+export function fCdf(value: number, numerator: number, denominator: number): number {
+  return fShape(numerator, denominator).tails(value).lower;
+}
+
 /** Probability that an F value is above `value`, with all its digits where it is small. */
 export function fUpperTail(value: number, numerator: number, denominator: number): number {
   return fShape(numerator, denominator).tails(value).upper;
