@@ -115,7 +115,7 @@ describe("minimise", () => {
       expect(bounded.estimates[i]).toBeCloseTo(value, 6);
     });
     expect(bounded.evaluations).toBeLessThan(20);
-    const broken = inverse.with(4, Number.NaN);
+    const broken = inverse.map((value, k) => (k === 4 ? Number.NaN : value));
     expect(minimise(bowl, Float64Array.of(9, 9, 9), { inverse: broken }).estimates[1]).toBeCloseTo(-2, 5);
   });
 });
