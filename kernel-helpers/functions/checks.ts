@@ -4,6 +4,7 @@ import { frozenCopy } from "../../src/numeric/index.js";
 import { ruleLabel } from "../../src/rule/index.js";
 import type { Check } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
+import { periodColumn } from "./across-periods.js";
 import { caseLog } from "./case-log.js";
 import { residualPanels } from "./residual-panels.js";
 import { presentFitIn } from "./show-fit.js";
@@ -97,14 +98,14 @@ function recoveryTable(checked: EngineCheck): Table {
 }
 
 function windowsTable(checked: EngineCheck): Table {
-  const { period } = checked.fit.observations;
+  const { axis } = checked.fit.observations;
   return table({
     title: "Estimates from parts of the record",
     columns: [
       ...groupColumn(checked),
       { key: "part", label: "Part", kind: "text" },
-      { key: "from", label: `${period.column}, from`, unit: period.unit, kind: "number", digits: 6 },
-      { key: "to", label: "to", unit: period.unit, kind: "number", digits: 6 },
+      periodColumn("from", `${axis.column}, from`, axis),
+      periodColumn("to", "to", axis),
       { key: "name", label: "Parameter", kind: "text" },
       { key: "value", label: "Estimate", kind: "number", digits: 4 },
       { key: "shift", label: "Moved by standard errors", kind: "number", digits: 2 },
@@ -114,8 +115,8 @@ function windowsTable(checked: EngineCheck): Table {
         window.estimates.map((estimate) => ({
           group: group.group,
           part: window.name,
-          from: window.from,
-          to: window.to,
+          from: axis.counts === "numbers" ? window.from : window.periods[0],
+          to: axis.counts === "numbers" ? window.to : window.periods[1],
           ...estimate,
           shift: estimate.shift ?? "not determined",
         })),

@@ -2,6 +2,7 @@ import { type Fit, type GroupFit, problemOf } from "../../src/estimate/index.js"
 import { normalQuantile, randomStream } from "../../src/numeric/index.js";
 import { ruleLabel } from "../../src/rule/index.js";
 import { type Figure, figure, type Panel } from "../figures/index.js";
+import { acrossRecord } from "./across-periods.js";
 
 type Point = GroupFit["points"][number];
 
@@ -38,7 +39,7 @@ interface Series {
 }
 
 function panelsOf(fit: Fit, state: string, groups: readonly Series[]): Panel[] {
-  const { period, states } = fit.observations;
+  const { states } = fit.observations;
   const unit = states.find((each) => each.name === state)?.unit ?? "";
   const residual = residualAxis(fit, unit);
   const before = groups.map(({ name, points }) => ({ name, pairs: neighbours(points) }));
@@ -58,7 +59,7 @@ function panelsOf(fit: Fit, state: string, groups: readonly Series[]): Panel[] {
   return [
     {
       title: "By period",
-      x: { title: period.column, unit: period.unit },
+      x: acrossRecord(fit.observations),
       y: residual,
       layers: [
         zero,

@@ -10,6 +10,7 @@ import { ruleLabel } from "../../src/rule/index.js";
 import { type Figure, fittedFigure, profileFigure } from "../figures/index.js";
 import { type Fit, withEstimates } from "../results/index.js";
 import { showing, superscript, type Table, table } from "../tables/index.js";
+import { acrossGroup, acrossRecord } from "./across-periods.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
 import { ruleNotes } from "./rule-title.js";
 import { presentObservations } from "./show-observations.js";
@@ -78,18 +79,19 @@ function groupNotes(fitted: EngineFit, group: GroupFit): string[] {
 }
 
 function observedAndFitted(fitted: EngineFit): Figure[] {
-  const { period, states } = fitted.observations;
-  const x = { title: period.column, unit: period.unit };
+  const { states } = fitted.observations;
   return states.map((state) =>
     fittedFigure({
       title: `Observed and fitted: ${ruleLabel(fitted.rule)}`,
-      x,
+      x: acrossRecord(fitted.observations),
       y: { title: state.name, unit: state.unit },
       series: fitted.groups.map((group) => {
         const points = group.points.filter((point) => point.state === state.name);
         const time = points.map((point) => point.time);
+        const recorded = fitted.observations.groups.find(({ name }) => name === group.group)!;
         return {
           name: group.group,
+          x: acrossGroup(recorded),
           observed: { name: "observed", x: time, y: points.map((point) => point.observed) },
           fitted: [{ name: "fitted", x: time, y: points.map((point) => point.fitted) }],
         };

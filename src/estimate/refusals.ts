@@ -49,6 +49,22 @@ export function refuseUnmatchedStates(states: readonly string[], recorded: reado
   );
 }
 
+export function unitScaleError(
+  state: string,
+  column: string,
+  recorded: string,
+  stated: string,
+  factor: number,
+): ModelError {
+  const times = Number((factor < 1 ? 1 / factor : factor).toPrecision(6));
+  return new ModelError(
+    "unit-scales-differ",
+    `The record gives "${column}" in ${recorded}, and the rule states ${stated} for ${state}: a factor of ${times} apart. ` +
+      `Write \`units: { ${state}: "${recorded}" }\` with the rule, or convert the column and state \`unit: "${stated}"\` in observations(...).`,
+    { state, column, recorded, stated, factor },
+  );
+}
+
 export function refuseMissingInput(input: string, group: ObservedGroup): ModelError {
   return new ModelError(
     "input-not-recorded",

@@ -112,7 +112,7 @@ function meanPath(
   if (ahead.kind === "simulation") return undefined;
   const { fit, options } = ahead;
   const fitted = fit.groups.find((each) => each.group === group.group)!;
-  const ground = fitGround(fit, fitted, options.periods, group.plans);
+  const ground = fitGround(fit, fitted, options.periods, group.plans, group.recordEnd);
   const place = fit.rule.states.indexOf(question.state);
   return deltaMargin(fit, ground, question.level, ({ values }) => {
     const path = values[place]!;

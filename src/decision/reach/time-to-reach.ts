@@ -57,7 +57,7 @@ function questionOf(ahead: Forecast | Simulation, rule: Rule, options: TimeToRea
   if (!rule.states.includes(state)) throw refuseStateUnknown(state, rule.states);
   if (!Number.isFinite(value)) throw refuseTarget(value);
   if (!(level > 0 && level < 1)) throw refuseLevel(level);
-  const period = ahead.kind === "forecast" ? ahead.fit.observations.period.unit : ahead.options.period;
+  const period = ahead.kind === "forecast" ? ahead.fit.observations.axis.unit : ahead.options.period;
   return {
     rule: ruleLabel(rule),
     state,

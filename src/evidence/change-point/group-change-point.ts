@@ -1,5 +1,6 @@
 import { type Fit, type GroupFit, problemOf, type Refitter } from "../../estimate/index.js";
 import type { RandomStream } from "../../numeric/index.js";
+import { labelAt } from "../../record/index.js";
 import { refuseNoDates, refuseUnsearched } from "../refusals.js";
 import { type BreakDate, breakScan } from "./break-scan.js";
 import { breakSentence } from "./break-sentence.js";
@@ -26,6 +27,8 @@ export interface GroupChangePoint {
   readonly date: number;
   readonly earliest: number;
   readonly latest: number;
+  /** The same three as labels of the record's periods. */
+  readonly labels: Readonly<Record<"date" | "earliest" | "latest", string>>;
   readonly before: Regime;
   readonly after: Regime;
   /** F at every date tried. */
@@ -75,10 +78,11 @@ function datedBy(
   scan: readonly BreakDate[],
   best: BreakDate,
   level: number,
-): Pick<GroupChangePoint, "date" | "earliest" | "latest" | "before" | "after" | "trace"> {
+): Pick<GroupChangePoint, "date" | "earliest" | "latest" | "labels" | "before" | "after" | "trace"> {
   const { count, size, entries } = again.rows;
-  const { time } = fit.observations.groups.find((each) => each.name === group.group)!;
+  const { time, axis, index } = fit.observations.groups.find((each) => each.name === group.group)!;
   const at = ({ first }: BreakDate): number => time[entries[first]!]!;
+  const label = ({ first }: BreakDate): string => labelAt(axis, index[entries[first]!]!);
   const close = scan.filter((date) => count * Math.log(date.value / best.value) <= cutOf(level));
   const parameters = (values: Float64Array): Regime["parameters"] => ({
     ...group.parameters,
@@ -88,6 +92,11 @@ function datedBy(
     date: at(best),
     earliest: at(close[0]!),
     latest: at(close[close.length - 1]!),
+    labels: {
+      date: label(best),
+      earliest: label(close[0]!),
+      latest: label(close[close.length - 1]!),
+    },
     before: { from: time[0]!, to: time[entries[best.first]! - 1]!, parameters: parameters(best.before) },
     after: { from: at(best), to: time[time.length - 1]!, parameters: parameters(best.after) },
     trace: scan.map((date) => ({

@@ -1,11 +1,13 @@
 import { type Fit, type GroupFit, problemOf, type Refitter } from "../../estimate/index.js";
+import { labelAt } from "../../record/index.js";
 
 /** The estimates from part of the record. */
 export interface Window {
   readonly name: string;
-  /** First and last time used, in the period column's unit. */
+  /** First and last time used, in the period column's unit, and their periods in words. */
   readonly from: number;
   readonly to: number;
+  readonly periods: readonly [string, string];
   readonly count: number;
   readonly estimates: readonly {
     readonly name: string;
@@ -27,7 +29,7 @@ export function windows(fit: Fit, group: GroupFit): readonly Window[] {
   const steps = !beginning().fromStart;
   const again = refitter();
   if (again?.minimisePart === undefined) return [];
-  const { time } = recorded;
+  const { time, axis, index } = recorded;
   const last = time.length - 1;
   const cut = (share: number): number => Math.round(share * time.length);
   const parts: readonly (readonly [string, number, number])[] = [
@@ -36,6 +38,7 @@ export function windows(fit: Fit, group: GroupFit): readonly Window[] {
     ...shares.map((share) => [`without the first ${100 * share}%`, cut(share), last] as const),
     ...shares.map((share) => [`without the last ${100 * share}%`, 0, last - cut(share)] as const),
   ];
+  const label = (row: number): string => labelAt(axis, index[row]!);
   const seen = new Set<string>();
   return parts.flatMap(([name, from, to]) => {
     if (seen.has(`${from} ${to}`)) return [];
@@ -50,7 +53,16 @@ export function windows(fit: Fit, group: GroupFit): readonly Window[] {
       const shift = standardError === undefined ? undefined : (value - estimate.value) / standardError;
       return { name: estimate.name, value, shift };
     });
-    return [{ name, from: time[from]!, to: time[to]!, count: end - first, estimates }];
+    return [
+      {
+        name,
+        from: time[from]!,
+        to: time[to]!,
+        periods: [label(from), label(to)],
+        count: end - first,
+        estimates,
+      },
+    ];
   });
 }
 

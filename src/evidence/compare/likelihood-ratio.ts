@@ -1,5 +1,5 @@
 import { type Fit, problemOf } from "../../estimate/index.js";
-import { chiSquareCdf } from "../../numeric/index.js";
+import { chiSquareUpperTail } from "../../numeric/index.js";
 import { nestingOf } from "./nesting.js";
 
 /** Whether parameters that a smaller rule leaves out are worth having. */
@@ -63,7 +63,7 @@ function ratioOf(
   const degreesOfFreedom = larger.criteria.counted - smaller.criteria.counted;
   const { bounds } = problemOf(larger);
   const edge = Object.keys(at).filter((name) => bounds(name).includes(at[name]!));
-  const probability = edge.length > 0 ? undefined : 1 - chiSquareCdf(statistic, degreesOfFreedom);
+  const probability = edge.length > 0 ? undefined : chiSquareUpperTail(statistic, degreesOfFreedom);
   const base = {
     smaller: names[0],
     larger: names[1],
