@@ -114,6 +114,15 @@ export function refuseNoStart(group: ObservedGroup, ruleText: string): ModelErro
   );
 }
 
+export function refuseStepsFromZero(group: ObservedGroup, row: number, ruleText: string): ModelError {
+  return new ModelError(
+    "step-from-zero",
+    `Row ${row}${named(group)} is a count of 0 and the next one is not: with \`errors: "process"\` every step starts from the ` +
+      `recorded count, and "${ruleText}" stays at 0. Write \`errors: "observation"\`, which fits the whole trajectory.`,
+    { group: group.name, row, rule: ruleText },
+  );
+}
+
 export function refuseNoCount(group: ObservedGroup, row: number, value: number): ModelError {
   return new ModelError(
     "not-a-count",

@@ -36,7 +36,8 @@ export function forecastGroup(
 }
 
 /** The index of the period to start after; undefined for the last recorded one. */
-function startsAfter(fit: Fit, { group }: GroupFit, from: ForecastOptions["from"]): number | undefined {
+function startsAfter(fit: Fit, { group }: GroupFit, asked: ForecastOptions["from"]): number | undefined {
+  const from = typeof asked === "object" ? asked.byGroup[group] : asked;
   if (from === undefined) return undefined;
   const { axis, index } = fit.observations.groups.find(({ name }) => name === group)!;
   const last = index[index.length - 1]!;

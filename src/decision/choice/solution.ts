@@ -17,11 +17,19 @@ export type Target = Measure &
     | { readonly atLeast: number; readonly is?: never; readonly atMost?: never }
   );
 
+/** A time by which something is to happen, or before which it is not, as a label of the record's periods. */
+export type DatedTarget = Extract<Measure, { readonly time: string }> &
+  (
+    | { readonly is: string; readonly atMost?: never; readonly atLeast?: never }
+    | { readonly atMost: string; readonly is?: never; readonly atLeast?: never }
+    | { readonly atLeast: string; readonly is?: never; readonly atMost?: never }
+  );
+
 /** Options of `solveFor`. */
 export interface SolveOptions extends StandingOptions {
   /** A parameter, a first value such as "N[0]", or an input whose usual level is sought. */
   readonly vary: string;
-  readonly until: Target;
+  readonly until: Target | DatedTarget;
   /** Lowest and highest value looked at; default a hundredth to a hundred times the present one, within its bounds. */
   readonly range?: readonly [number, number];
   /** The setting comes in multiples of this (0.01 for money, 1 for pieces): rounded to the side that meets the target. */

@@ -18,8 +18,10 @@ import { separationAt } from "./separation.js";
 export interface NextReadingOptions {
   /** Periods beyond the record up to which a reading could be taken, and up to which the answer looks. */
   readonly periods: number;
-  /** Times at which it could be taken, in the unit of the period column; default every period from the first on. */
-  readonly values?: readonly number[] | { readonly from: number; readonly to: number };
+  /** Periods at which it could be taken, by number or label; default every period from the first on. */
+  readonly values?:
+    | readonly (number | string)[]
+    | { readonly from: number | string; readonly to: number | string };
   /** The answer whose margin is to be narrowed; needed for a single fit. */
   readonly answer?: Measure;
   /** What is read; default the first state. */
@@ -157,15 +159,16 @@ function candidates(
   const wanted = (time: number): boolean => {
     if (when === undefined) return true;
     return "from" in when
-      ? time >= when.from && time <= when.to
-      : when.some((each) => Math.abs(each - time) < 1e-9);
+      ? time >= standing.timeOf(when.from) && time <= standing.timeOf(when.to)
+      : when.some((each) => Math.abs(standing.timeOf(each) - time) < 1e-9);
   };
   const found = times.filter(wanted).flatMap((time) => {
     const rows = rivals.map((rival) => rowAt(rival, time));
     const ahead = rows.every((row, i) => row > rivals[i]!.standing.present);
     return rows.every((row) => row >= 0) && (ahead || !process) ? [{ time, rows }] : [];
   });
-  if (found.length === 0) throw refuseNoCandidate(times[0]!, times[times.length - 1]!);
+  if (found.length === 0)
+    throw refuseNoCandidate(standing.timeWords(times[0]!), standing.timeWords(times[times.length - 1]!));
   return found;
 }
 

@@ -11,10 +11,10 @@ import {
 } from "../../dynamics/index.js";
 import { type Fit, problemOf } from "../../estimate/index.js";
 import { type FitGround, fitGround, type Ground, type Noise, ruleNoise } from "../../projection/index.js";
-import { labelBetween, type PeriodAxis } from "../../record/index.js";
+import { indexOf, labelAt, labelBetween, type PeriodAxis } from "../../record/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../../rule/index.js";
 import type { MeasureUnits } from "../measure/measure.js";
-import { refuseGroup } from "../refusals.js";
+import { refuseGroup, refusePeriod } from "../refusals.js";
 import { plain } from "../words/amount.js";
 
 /** What a decision is worked out from, beside the rule or fit itself. */
@@ -48,6 +48,8 @@ export interface Standing extends MeasureUnits {
   readonly axis: PeriodAxis;
   /** Time of period 0 of the axis, in the period column's unit. */
   readonly zero: number;
+  /** The period column's value of a period that is named by its label, or given as such a value. */
+  readonly timeOf: (period: string | number) => number;
   /** The period column's value at a row. */
   readonly timeAt: (row: number) => number;
   readonly change: readonly (Noise | undefined)[];
@@ -92,6 +94,7 @@ function fitStanding(fit: Fit, options: StandingOptions): Standing {
     zero: first,
     timeAt: (row) => first + (ground.from + row) * axis.step.every,
     timeWords: timeWordsOf(axis, first),
+    timeOf: timeReader(axis, first),
     change: problemOf(fit).group(group.group).noise.change,
     plans,
     paths: options.paths ?? 2000,
@@ -127,6 +130,7 @@ function ruleStanding(rule: Rule, options: StandingOptions): Standing {
     zero: first,
     timeAt: (row) => first + (from + row) * axis.step.every,
     timeWords: timeWordsOf(axis, first),
+    timeOf: timeReader(axis, first),
     change: ruleNoise(rule, parameters, options.noise),
     plans: options.inputs ?? {},
     paths: options.paths ?? 2000,
@@ -141,4 +145,13 @@ function ruleStanding(rule: Rule, options: StandingOptions): Standing {
 function timeWordsOf(axis: PeriodAxis, zero: number): (time: number) => string {
   if (axis.counts === "numbers") return (time) => `${axis.unit} ${plain(time, 5)}`;
   return (time) => labelBetween(axis, 0, (time - zero) / axis.step.every);
+}
+
+function timeReader(axis: PeriodAxis, zero: number): Standing["timeOf"] {
+  return (period) => {
+    if (typeof period === "number") return period;
+    const index = indexOf(axis, period);
+    if (index === undefined) throw refusePeriod(period, labelAt(axis, 0), labelAt(axis, 1));
+    return zero + index * axis.step.every;
+  };
 }

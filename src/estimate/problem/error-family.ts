@@ -1,5 +1,6 @@
 import {
   chiSquareCdf,
+  chiSquareUpperTail,
   fCdf,
   gammaDraw,
   logGamma,
@@ -84,8 +85,8 @@ const poissonFamily: ErrorFamily = {
     fitted > 0 ? root * root * logPoisson(observed, fitted, censoring) : Number.NEGATIVE_INFINITY,
   pearson: ({ observed, fitted, root }) => (root * (observed - fitted)) / Math.sqrt(fitted),
   cumulative: ({ observed, fitted }) => [
-    observed < 1 ? 0 : 1 - chiSquareCdf(2 * fitted, 2 * observed),
-    1 - chiSquareCdf(2 * fitted, 2 * (observed + 1)),
+    observed < 1 ? 0 : chiSquareUpperTail(2 * fitted, 2 * observed),
+    chiSquareUpperTail(2 * fitted, 2 * (observed + 1)),
   ],
   draw: (fitted, _root, _spread, stream) => poissonDraw(fitted, stream),
 };

@@ -1,5 +1,5 @@
 import { type Fit, type GroupFit, problemOf } from "../../estimate/index.js";
-import { fCdf } from "../../numeric/index.js";
+import { fUpperTail } from "../../numeric/index.js";
 
 /** Whether a rule misses its readings by more than replicates differ among themselves. */
 export interface LackOfFit {
@@ -38,7 +38,7 @@ export function lackOfFit(fit: Fit, group: GroupFit): readonly LackOfFit[] {
     const freedom = total(rows, ({ place }) => Math.max(0, spread.count[place]! - 1));
     if (!(within > 0)) return [];
     const ratio = missed / left / (within / freedom);
-    const probability = 1 - fCdf(ratio, left, freedom);
+    const probability = fUpperTail(ratio, left, freedom);
     const sentence = told(ratio, probability);
     return [{ state, ratio, degreesOfFreedom: [left, freedom] as const, probability, sentence }];
   });
