@@ -4,7 +4,16 @@ import { compileRule, type Rule } from "../rule/index.js";
 import type { Ground } from "./central-path.js";
 import type { InputPlans } from "./inputs/input-plan.js";
 import { plannedInputs } from "./inputs/planned-inputs.js";
+import { startNames } from "./levels.js";
 import { refuseGap } from "./refusals.js";
+
+/** What a record reads of a state: a multiple of it. */
+export interface StateFactor {
+  readonly name: string;
+  readonly value: number;
+  /** Among the unknowns of the fit. */
+  readonly unknown: number;
+}
 
 /** A ground, and where the fit's unknowns stand in it. */
 export interface FitGround extends Ground {
@@ -14,6 +23,8 @@ export interface FitGround extends Ground {
   readonly recordEnd: number;
   /** By unknown of the fit: slot among parameters, then state vector; -1 where the path does not begin with it. */
   readonly places: Int32Array;
+  /** By state that the record reads through a factor: the factor's name and value, and its place among the unknowns. */
+  readonly factors: readonly (StateFactor | undefined)[];
   /** Where a filter leaves the present state uncertain: its mean and covariance, on the log scale or not. */
   readonly belief?: { readonly mean: Float64Array; readonly covariance: Float64Array; readonly log: boolean };
 }
@@ -31,7 +42,7 @@ export function fitGround(fit: Fit, group: GroupFit, periods: number, plans: Inp
   const reach = Math.max(0, ...rule.memory.map(({ lag }) => lag));
   const from = trajectory ? reach : recordEnd;
   const slots = [...rule.states.map((state) => ({ state, lag: 0 })), ...rule.memory];
-  const names = slots.map(({ state, lag }) => `${state}[${reach - lag}]`);
+  const names = startNames(rule);
   const belief = beliefOf(fit, group);
   const initial = Float64Array.from(slots, ({ state, lag }, s) => {
     if (belief !== undefined) return belief.log ? Math.exp(belief.mean[s]!) : belief.mean[s]!;
@@ -55,9 +66,28 @@ export function fitGround(fit: Fit, group: GroupFit, periods: number, plans: Inp
     group,
     recorded,
     recordEnd,
+    present: recordEnd - from,
     places,
+    startNames: trajectory ? names : [],
+    firstValues: trajectory ? {} : firstRecorded(rule, recorded),
+    factors: factorsOf(fit, group),
     ...(belief && { belief }),
   };
+}
+
+function firstRecorded(rule: Rule, recorded: ObservedGroup): Readonly<Record<string, number>> {
+  const known = rule.states.map(
+    (state) => [`${state}[0]`, recorded.values[state]?.[0] ?? Number.NaN] as const,
+  );
+  return Object.fromEntries(known.filter(([, value]) => Number.isFinite(value)));
+}
+
+function factorsOf(fit: Fit, { estimates }: GroupFit): FitGround["factors"] {
+  return fit.rule.states.map((state) => {
+    const name = fit.options.factor?.[state];
+    const unknown = estimates.findIndex((estimate) => estimate.name === name && estimate.role === "factor");
+    return unknown < 0 ? undefined : { name: name!, value: estimates[unknown]!.value, unknown };
+  });
 }
 
 function beliefOf(fit: Fit, { filter }: GroupFit): FitGround["belief"] {

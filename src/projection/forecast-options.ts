@@ -1,4 +1,4 @@
-import type { Watch } from "./ensemble/passage.js";
+import type { Watch } from "./ensemble/placed-watches.js";
 import type { InputPlans } from "./inputs/input-plan.js";
 import type { Scenarios } from "./inputs/scenarios.js";
 

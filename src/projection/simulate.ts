@@ -1,21 +1,22 @@
 import { type InitialValues, initialVector, parametersBySlot } from "../dynamics/index.js";
 import { randomStream } from "../numeric/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../rule/index.js";
-import { centralPath, type Ground, stateLimits } from "./central-path.js";
+import { centralPath, type Ground } from "./central-path.js";
 import { checkRun, keepLimit } from "./check-run.js";
 import { blockStreams } from "./ensemble/block-streams.js";
 import { runEnsemble } from "./ensemble/ensemble.js";
 import { gatherer } from "./ensemble/gather.js";
-import type { Watch } from "./ensemble/passage.js";
-import { passagesOf, placedWatches } from "./ensemble/placed-watches.js";
+import { passagesOf, placedWatches, type Watch } from "./ensemble/placed-watches.js";
 import { growthWarnings } from "./growth-warnings.js";
 import type { InputPlans } from "./inputs/input-plan.js";
 import { plannedInputs } from "./inputs/planned-inputs.js";
 import { type Scenarios, scenariosOf } from "./inputs/scenarios.js";
+import { levelSource, startNames } from "./levels.js";
 import { type Noise, noiseDraw } from "./noise/noise.js";
 import { ruleNoise } from "./noise/rule-noise.js";
 import type { GroupForecast } from "./projected-group.js";
 import { rangeWarnings } from "./range-warnings.js";
+import { observableRange, runBounds } from "./state-range.js";
 
 /** Options of `simulate`. */
 export interface SimulateOptions {
@@ -30,7 +31,7 @@ export interface SimulateOptions {
   readonly scenarios?: Scenarios;
   /** By state: the random change of each period; default what the rule says. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** By state: the error of a reading, reported and not carried on. */
+  /** By state: the error of an observation, reported and not carried on. */
   readonly observationNoise?: Readonly<Record<string, Noise>>;
   /** What a period is called, as in "month"; default "period". */
   readonly period?: string;
@@ -90,7 +91,8 @@ export function simulate(rule: Rule, options: SimulateOptions): Simulation {
   const settings = { periods, paths, seed, levels, period: options.period ?? "period" };
   const groups = scenariosOf(options).map(({ name, plans }) => {
     const inputs = plannedInputs(rule, plans, { recorded: () => [], rows: 0, last: periods, firstNumber: 0 });
-    const ground = { rule, compiled, parameters, initial, inputs, from: 0, periods };
+    const own = { startNames: startNames(rule), firstValues: {}, present: 0 };
+    const ground = { rule, compiled, parameters, initial, inputs, from: 0, periods, ...own };
     return simulated(ground, name, plans, { ...options, ...settings }, change);
   });
   return Object.freeze({
@@ -114,12 +116,24 @@ function simulated(
   const { rule, compiled, periods } = ground;
   const { paths } = options;
   const central = centralPath(ground);
-  const watches = placedWatches(rule, options.watch);
-  const keep = paths * (periods + 1) * rule.states.length <= keepLimit;
+  const states = rule.states.length;
+  const quantities = rule.quantities.length;
+  const keep = paths * (periods + 1) * (states + quantities) <= keepLimit;
+  const starts = {
+    paths,
+    size: ground.parameters.length,
+    parameters: ground.parameters,
+    initial: ground.initial,
+  };
+  const levels = levelSource(ground, starts);
+  const watches = placedWatches(rule, options.watch, levels, 0);
+  const draws = change.map((noise) => noise && noiseDraw(noise));
+  const bounds = runBounds(rule, draws);
   const found = gatherer({
     kind: "simulated path",
     levels: options.levels,
-    states: rule.states.length,
+    states,
+    quantities,
     paths,
     periods,
     keep,
@@ -127,25 +141,27 @@ function simulated(
   });
   runEnsemble({
     compiled,
-    states: rule.states.length,
+    bounds,
+    observable: observableRange(rule),
     width: ground.initial.length,
     inputs: ground.inputs,
     from: 0,
     periods,
-    starts: { paths, size: ground.parameters.length, parameters: ground.parameters, initial: ground.initial },
-    change: change.map((noise) => noise && noiseDraw(noise)),
+    starts,
+    change: draws,
     reading: rule.states.map((state) => {
       const noise = options.observationNoise?.[state];
       return noise && noiseDraw(noise);
     }),
-    limits: stateLimits(rule),
+    quantities: keep || watches.some(({ place }) => place >= states) ? quantities : 0,
     streams: blockStreams(randomStream(options.seed), paths),
     onRow: found.onRow,
-    ...(options.onProgress && { onProgress: options.onProgress }),
+    onProgress: options.onProgress,
   });
-  const states = found.states();
+  const gathered = found.states();
   const index = Array.from({ length: periods + 1 }, (_, t) => t);
-  const left = found.ended[periods]! / paths;
+  const period = (row: number): string => `${options.period ?? "period"} ${row + (options.startsAt ?? 0)}`;
+  const left = found.ended() / paths;
   return {
     group: "",
     scenario,
@@ -157,23 +173,27 @@ function simulated(
       state,
       unit: rule.units[state] ?? "",
       central: central.values[s]!,
-      median: states[s]!.median,
-      bands: states[s]!.bands,
-      ...(states[s]!.growth && { growth: states[s]!.growth }),
+      median: gathered[s]!.median,
+      bands: gathered[s]!.bands,
+      ...(gathered[s]!.growth && { growth: gathered[s]!.growth }),
     })),
     ensemble: {
       paths,
       periods,
       mean: [],
-      future: keep ? states.map((state) => state.paths!) : [],
+      future: keep ? gathered.map((state) => state.paths!) : [],
+      process: found.process,
+      passed: found.passed,
+      central: central.kept,
+      levels: { central: levels, paths: levels },
       discarded: 0,
     },
     passages: passagesOf(watches, found.passages),
     left,
     leftError: Math.sqrt((left * (1 - left)) / paths),
     warnings: [
-      ...rangeWarnings(central, options.startsAt ?? 0, left, paths),
-      ...growthWarnings(rule, found.states(), options.period ?? "period"),
+      ...rangeWarnings({ rule, central, period, left, paths, bounds, passed: found.passed }),
+      ...growthWarnings(rule, gathered, options.period ?? "period"),
     ],
   };
 }

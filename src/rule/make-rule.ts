@@ -3,9 +3,10 @@ import type { NamedRule } from "./catalogue/named-rule.js";
 import { checkOptions } from "./check/check-options.js";
 import type { Declared } from "./check/checked-rule.js";
 import { memoryOf } from "./graph/build-graph.js";
-import type { RecurrenceOptions } from "./recurrence-options.js";
+import type { Bounds, RecurrenceOptions } from "./recurrence-options.js";
 import type { Rule } from "./rule.js";
 import { defineRule, keepDefinition } from "./rule-definition.js";
+import type { AtBound } from "./state-bounds.js";
 import { unitFindings } from "./units/unit-findings.js";
 
 function copyOf<T>(given: Readonly<Record<string, T>> | undefined): Readonly<Record<string, T>> {
@@ -17,6 +18,16 @@ function copyOf<T>(given: Readonly<Record<string, T>> | undefined): Readonly<Rec
   ]);
   return Object.freeze(Object.fromEntries(entries));
 }
+
+const hasMore = (bounds: Bounds): bounds is Extract<Bounds, { range: unknown }> => "range" in bounds;
+
+const rangesOf = (bounds: RecurrenceOptions["bounds"] = {}): Record<string, readonly [number, number]> =>
+  Object.fromEntries(Object.entries(bounds).map(([name, each]) => [name, hasMore(each) ? each.range : each]));
+
+const atBoundsOf = (bounds: RecurrenceOptions["bounds"] = {}): Record<string, AtBound> =>
+  Object.fromEntries(
+    Object.entries(bounds).flatMap(([name, each]) => (hasMore(each) ? [[name, each.atBounds]] : [])),
+  );
 
 /** Reads, checks and keeps a rule; `named` is what the catalogue knows of it. */
 export function makeRule(text: string, options: RecurrenceOptions, named?: NamedRule): Rule {
@@ -40,7 +51,8 @@ export function makeRule(text: string, options: RecurrenceOptions, named?: Named
     inputs: Object.freeze([...checked.inputs]),
     parameters: Object.freeze([...checked.parameters]),
     units: copyOf(options.units),
-    bounds: copyOf(options.bounds),
+    bounds: copyOf(rangesOf(options.bounds)),
+    atBounds: copyOf(atBoundsOf(options.bounds)),
     start: copyOf(options.start),
     fixed: copyOf(options.fixed),
     initial: copyOf(options.initial),

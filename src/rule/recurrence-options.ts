@@ -1,4 +1,10 @@
 import type { ProcessNoise } from "./rule.js";
+import type { AtBound } from "./state-bounds.js";
+
+/** Lowest and highest value; for a state also what becomes of it there. */
+export type Bounds =
+  | readonly [number, number]
+  | { readonly range: readonly [number, number]; readonly atBounds: AtBound };
 
 /** What can be said of a rule beside its text. */
 export interface RecurrenceOptions {
@@ -8,8 +14,12 @@ export interface RecurrenceOptions {
   readonly inputs?: readonly string[];
   /** Unit by name. */
   readonly units?: Readonly<Record<string, string>>;
-  /** Lowest and highest admitted value by state or parameter; infinite where open. */
-  readonly bounds?: Readonly<Record<string, readonly [number, number]>>;
+  /**
+   * Lowest and highest admitted value by state or parameter; infinite where open. For a state also with what happens
+   * there: `{ range: [0, 1], atBounds: "error" }`. Default: a state is absorbed at a lower bound of 0 (it stays 0), and
+   * any other bound is an error of the rule, at which a path ends.
+   */
+  readonly bounds?: Readonly<Record<string, Bounds>>;
   /** Where a fit starts, by parameter. */
   readonly start?: Readonly<Record<string, number>>;
   /** Parameters that no fit changes. */

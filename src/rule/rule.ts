@@ -1,5 +1,6 @@
 import type { Warning } from "../numeric/index.js";
 import type { NamedRule } from "./catalogue/named-rule.js";
+import type { AtBound } from "./state-bounds.js";
 
 /** Random change added in every period: on the value itself (`normal`), or as a factor exp(sd z) (`lognormal`). */
 export interface ProcessNoise {
@@ -32,6 +33,8 @@ export interface Rule {
   readonly units: Readonly<Record<string, string>>;
   /** Lowest and highest admitted value by parameter or state; infinite where open. */
   readonly bounds: Readonly<Record<string, readonly [number, number]>>;
+  /** By state, where stated: what becomes of it at its bounds. */
+  readonly atBounds: Readonly<Record<string, AtBound>>;
   /** Starting values for a fit, by parameter. */
   readonly start: Readonly<Record<string, number>>;
   /** Parameters held at a value in every fit. */

@@ -1,7 +1,17 @@
 import type { Rule } from "../rule.js";
 import { type NamedRuleOptions, named } from "./named.js";
 import type { CatalogueEntry } from "./named-rule.js";
-import { aboveOne, capacity, fraction, growth, level, other, positive, pure } from "./quantities.js";
+import {
+  aboveOne,
+  capacity,
+  fraction,
+  growth,
+  level,
+  neverNegative,
+  other,
+  positive,
+  pure,
+} from "./quantities.js";
 
 const speed = other("largest growth rate", "1/hour");
 const stepLength = other("length of a period", "hour");
@@ -59,7 +69,7 @@ const resource: CatalogueEntry = {
     Y: pure("yield, mass for mass"),
   },
   holds: ["mu > 0", "h > 0", "Ks > 0", "Y > 0", "N0 >= 0", "S0 >= 0", "h*mu*N0 <= Y*(Ks + S0)"],
-  bounds: { mu: positive, h: positive, Ks: positive, Y: positive, N: positive, S: positive },
+  bounds: { mu: positive, h: positive, Ks: positive, Y: positive, N: positive, S: neverNegative },
   equilibria: [],
   closedForms: [],
   remarks:

@@ -1,5 +1,5 @@
 import { ModelError } from "../../numeric/index.js";
-import type { RecurrenceOptions } from "../recurrence-options.js";
+import type { Bounds, RecurrenceOptions } from "../recurrence-options.js";
 import { suggestion } from "../refusals.js";
 import type { CheckedRule } from "./checked-rule.js";
 
@@ -30,6 +30,8 @@ interface OptionCheck {
   readonly fits: Fits;
 }
 
+const isRange = (value: unknown): boolean =>
+  Array.isArray(value) && value.length === 2 && value[0] < value[1];
 const isNumber = (value: unknown): boolean => typeof value === "number" && Number.isFinite(value);
 
 function checks(rule: CheckedRule): readonly OptionCheck[] {
@@ -48,9 +50,13 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
       option: "bounds",
       what: "state or parameter",
       names: [...states, ...parameters],
-      wanted: () => "two numbers, lowest first, as in [0, Infinity]",
-      fits: (value: readonly [number, number]) =>
-        Array.isArray(value) && value.length === 2 && value[0] < value[1],
+      wanted: (name) =>
+        `two numbers, lowest first, as in [0, Infinity]${states.includes(name) ? ', or { range: [0, Infinity], atBounds: "absorbed" | "error" }' : ""}`,
+      fits: (value: Bounds | null, name: string) =>
+        isRange(value) ||
+        (states.includes(name) &&
+          isRange((value as { range?: unknown } | null)?.range) &&
+          ["absorbed", "error"].includes((value as { atBounds: string }).atBounds)),
     },
     { option: "start", what: "parameter", names: parameters, wanted: number, fits: isNumber },
     { option: "fixed", what: "parameter", names: parameters, wanted: number, fits: isNumber },

@@ -1,12 +1,12 @@
 import type { Fit } from "../../estimate/index.js";
 import { quantile, type RandomStream, randomStream } from "../../numeric/index.js";
 import { centralPath, fittedNoise, type Ground, noiseDraw } from "../../projection/index.js";
+import { type DecisionContext, decisionContext } from "../setting/decision-context.js";
 import { drawnGrounds } from "../setting/setting-margin.js";
-import { type Standing, standingOf } from "../setting/standing.js";
 
 /** Parameters drawn from a fit, with what each says of readings to come; values on the fitting scale. */
-export interface ImaginedReadings {
-  readonly standing: Standing;
+export interface SimulatedReadings {
+  readonly context: DecisionContext;
   readonly grounds: readonly Ground[];
   /** [draws][rows of the path]: the value that a reading is scattered around. */
   readonly centres: readonly Float64Array[];
@@ -16,8 +16,8 @@ export interface ImaginedReadings {
   readonly logarithm: boolean;
 }
 
-/** What is imagined of a fit. */
-export interface ImagineOptions {
+/** What is simulated of a fit. */
+export interface SimulateReadingsOptions {
   readonly periods: number;
   readonly group?: string;
   readonly state: number;
@@ -27,36 +27,40 @@ export interface ImagineOptions {
 }
 
 /** Draws parameters of a fit and runs each as far as readings may be taken. */
-export function imaginedReadings(fit: Fit, options: ImagineOptions): ImaginedReadings {
+export function simulatedReadings(fit: Fit, options: SimulateReadingsOptions): SimulatedReadings {
   const { state, draws, replicates, seed, group, periods } = options;
-  const standing = standingOf(fit, { periods, seed, ...(group !== undefined && { group }) });
+  const context = decisionContext(fit, { periods, seed, ...(group !== undefined && { group }) });
   const logarithm = fit.options.distribution === "lognormal";
   const scale = (value: number): number => (logarithm ? Math.log(value) : value);
-  const grounds = drawnGrounds(standing, draws);
-  const centres = grounds.map((ground) => Float64Array.from(centralPath(ground).values[state]!, scale));
-  const { reading } = fittedNoise(fit, standing.fitGround!.group);
+  const { grounds, factors } = drawnGrounds(context, draws);
+  // What is read of a state is its factor times it, and every draw has a factor of its own.
+  const factor = (draw: number): number => factors[state]?.[draw] ?? 1;
+  const centres = grounds.map((ground, k) =>
+    Float64Array.from(centralPath(ground).values[state]!, (value) => scale(factor(k) * value)),
+  );
+  const { reading } = fittedNoise(fit, context.fitGround!.group);
   const noise = reading[state];
-  const rows = standing.ground.periods + 1;
+  const rows = context.ground.periods + 1;
   const alone = noise !== undefined && "sd" in noise ? noise.sd / Math.sqrt(replicates) : undefined;
   const scatter =
     alone === undefined
-      ? processScatter(fit, standing, grounds, centres, state, scale, randomStream(seed).jump())
+      ? processScatter(fit, context, grounds, centres, state, scale, randomStream(seed).jump())
       : new Float64Array(rows).fill(alone);
-  return { standing, grounds, centres, scatter, logarithm };
+  return { context, grounds, centres, scatter, logarithm };
 }
 
 /** Scatter of single values around their draw's path, from one noisy run of every draw. */
 function processScatter(
   fit: Fit,
-  standing: Standing,
+  context: DecisionContext,
   grounds: readonly Ground[],
   centres: readonly Float64Array[],
   state: number,
   scale: (value: number) => number,
   stream: RandomStream,
 ): Float64Array {
-  const draws = fittedNoise(fit, standing.fitGround!.group).change.map((noise) => noise && noiseDraw(noise));
-  const rows = standing.ground.periods + 1;
+  const draws = fittedNoise(fit, context.fitGround!.group).change.map((noise) => noise && noiseDraw(noise));
+  const rows = context.ground.periods + 1;
   const offsets = Array.from({ length: rows }, () => new Float64Array(grounds.length));
   grounds.forEach((ground, k) => {
     const at = ground.initial.slice();

@@ -1,21 +1,25 @@
 import { type InitialValues, initialVector, parametersBySlot } from "../../dynamics/index.js";
-import type { Fit } from "../../estimate/index.js";
+import type { Fit, GroupFit } from "../../estimate/index.js";
+import { type RandomStream, randomStream } from "../../numeric/index.js";
 import {
+  centralLevels,
   type FitGround,
   fitGround,
   fittedNoise,
   type Ground,
   type InputPlans,
+  levelValues,
   type Noise,
   plannedInputs,
   ruleNoise,
+  startNames,
 } from "../../projection/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../../rule/index.js";
-import type { MeasureUnits } from "../measure/measure.js";
-import { refuseGroup } from "../refusals.js";
+import { groupError } from "../errors.js";
+import type { MeasureUnits } from "../measure/measure-words.js";
 
 /** What a decision is worked out from, beside the rule or fit itself. */
-export interface StandingOptions {
+export interface DecisionOptions {
   /** Whole periods ahead. */
   readonly periods: number;
   /** By input: its plan. For a fit the first period ahead comes first, for a rule period 0. */
@@ -25,32 +29,33 @@ export interface StandingOptions {
   /** Of a rule: its parameters and first values. */
   readonly parameters?: Readonly<Record<string, number>>;
   readonly initial?: InitialValues;
-  /** Of a rule: random change by state, for probabilities. */
+  /** Of a rule: random change by state; every measure is then one of the paths' distribution. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
   /** Of a rule: what a period is called, and what the present one is numbered; default "period" and 0. */
   readonly period?: string;
   readonly startsAt?: number;
-  /** Paths for probabilities and margins; default 2000. */
+  /** Paths where chance has a part; default 4000. */
   readonly paths?: number;
   /** Default 1. */
   readonly seed?: number;
 }
 
 /** A rule or a fit made ready for questions about its future. */
-export interface Standing extends MeasureUnits {
+export interface DecisionContext extends MeasureUnits {
   readonly rule: Rule;
   readonly fit: Fit | undefined;
   readonly ground: Ground;
   /** Of a fit. */
   readonly fitGround: FitGround | undefined;
-  /** Row of the path that is the present; what is ahead begins one row later. */
-  readonly present: number;
   /** The period column's value at a row. */
   readonly timeAt: (row: number) => number;
-  readonly change: readonly (Noise | undefined)[];
+  /** By state: the random change at parameters of its own, because its size may be one of them. */
+  readonly changeAt: (parameters: Float64Array) => readonly (Noise | undefined)[];
   readonly plans: InputPlans;
   readonly paths: number;
   readonly seed: number;
+  /** Random numbers of the question, the same at every call: those of a forecast or simulation with this seed. */
+  readonly stream: () => RandomStream;
   /** The ground under other plans of inputs. */
   readonly planned: (plans: InputPlans) => Ground;
 }
@@ -58,20 +63,28 @@ export interface Standing extends MeasureUnits {
 /** Whether a subject is a fit. */
 export const isFit = (subject: Fit | Rule): subject is Fit => subject.kind === "fit";
 
-/** Makes a rule or a fit ready. */
-export function standingOf(subject: Fit | Rule, options: StandingOptions): Standing {
-  return isFit(subject) ? fitStanding(subject, options) : ruleStanding(subject, options);
-}
-
 /** "N" of "N[0]"; any other name is its own. */
 export const stateOf = (name: string): string => name.replace(/\[\d+\]$/, "");
 
-function fitStanding(fit: Fit, options: StandingOptions): Standing {
+/** Makes a rule or a fit ready. */
+export function decisionContext(subject: Fit | Rule, options: DecisionOptions): DecisionContext {
+  const own = isFit(subject) ? fitContext(subject, options) : ruleContext(subject, options);
+  const { ground } = own;
+  return {
+    ...own,
+    plans: options.inputs ?? {},
+    paths: options.paths ?? 4000,
+    seed: options.seed ?? 1,
+    random: own.changeAt(ground.parameters).some((noise) => noise !== undefined),
+    levelAt: (level) => levelValues(level, centralLevels(ground))[0]!,
+  };
+}
+
+type OwnContext = Omit<DecisionContext, "plans" | "paths" | "seed" | "random" | "levelAt">;
+
+function fitContext(fit: Fit, options: DecisionOptions): OwnContext {
   const { rule, observations } = fit;
-  const names = fit.groups.map(({ group }) => group);
-  if (options.group === undefined && fit.groups.length > 1) throw refuseGroup(undefined, names);
-  const group = fit.groups.find((each) => each.group === (options.group ?? names[0]));
-  if (group === undefined) throw refuseGroup(options.group, names);
+  const [group, place] = groupOf(fit, options.group);
   const planned = (plans: InputPlans): FitGround => fitGround(fit, group, options.periods, plans);
   const ground = planned(options.inputs ?? {});
   const first = ground.recorded.time[0]!;
@@ -81,41 +94,50 @@ function fitStanding(fit: Fit, options: StandingOptions): Standing {
     fit,
     ground,
     fitGround: ground,
-    present: ground.recordEnd - ground.from,
     timeAt: (row) => first + (ground.from + row) * step,
-    change: fittedNoise(fit, group).change,
-    plans: options.inputs ?? {},
-    paths: options.paths ?? 2000,
-    seed: options.seed ?? 1,
+    changeAt: () => fittedNoise(fit, group).change,
+    stream: () =>
+      Array.from({ length: place }).reduce<RandomStream>(
+        (own) => own.jump(),
+        randomStream(options.seed ?? 1),
+      ),
     planned,
     unitOf: (name) => {
       const state = stateOf(name);
-      return observations.states.find((each) => each.name === state)?.unit || (rule.units[state] ?? "");
+      const scaled = ground.factors[rule.states.indexOf(state)] !== undefined;
+      const recorded = observations.states.find((each) => each.name === state)?.unit;
+      return (scaled ? undefined : recorded) || (rule.units[state] ?? "");
     },
     periodUnit: observations.period.unit,
   };
 }
 
-function ruleStanding(rule: Rule, options: StandingOptions): Standing {
+function groupOf(fit: Fit, name: string | undefined): readonly [GroupFit, number] {
+  const names = fit.groups.map(({ group }) => group);
+  if (name === undefined && fit.groups.length > 1) throw groupError(undefined, names);
+  const place = fit.groups.findIndex(({ group }) => group === (name ?? names[0]));
+  if (place < 0) throw groupError(name, names);
+  return [fit.groups[place]!, place];
+}
+
+function ruleContext(rule: Rule, options: DecisionOptions): OwnContext {
   const { periods } = options;
   const parameters = parametersBySlot(rule, options.parameters);
   const initial = initialVector(rule, options.initial);
   const compiled = compileRule(rule);
   const planned = (plans: InputPlans): Ground => {
     const inputs = plannedInputs(rule, plans, { recorded: () => [], rows: 0, last: periods, firstNumber: 0 });
-    return { rule, compiled, parameters, initial, inputs, from: 0, periods };
+    const start = { startNames: startNames(rule), firstValues: {}, from: 0, present: 0 };
+    return { rule, compiled, parameters, initial, inputs, periods, ...start };
   };
   return {
     rule,
     fit: undefined,
     ground: planned(options.inputs ?? {}),
     fitGround: undefined,
-    present: 0,
     timeAt: (row) => row + (options.startsAt ?? 0),
-    change: ruleNoise(rule, parameters, options.noise),
-    plans: options.inputs ?? {},
-    paths: options.paths ?? 2000,
-    seed: options.seed ?? 1,
+    changeAt: (at) => ruleNoise(rule, at, options.noise),
+    stream: () => randomStream(options.seed ?? 1),
     planned,
     unitOf: (name) => rule.units[stateOf(name)] ?? "",
     periodUnit: options.period ?? "period",
