@@ -20,4 +20,3 @@ export {
   nextReading,
   type ReadingChoice,
 } from "./reading/next-reading.js";
-export { amount } from "./words/amount.js";

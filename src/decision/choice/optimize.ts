@@ -113,7 +113,7 @@ export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum
     level,
     curve: peak.looked.map((at) => ({ value: at.at, measure: sign * at.height })),
   };
-  const notes = signNotes(context, setting, answer.value, measure, answer.achieved);
+  const notes = signNotes(context, setting, answer.value, measure, best);
   const sentence = [bestSentence(answer, measure, sign, context), ...notes].join(" ");
   return Object.freeze({ kind: "optimum", ...answer, sentence });
 }

@@ -84,7 +84,7 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
     ...(past === undefined ? [] : [`${opened(past)}.`]),
     ...solutions
       .slice(0, 1)
-      .flatMap(({ value, achieved }) => signNotes(context, setting, value, until, achieved)),
+      .flatMap(({ value }) => signNotes(context, setting, value, until, search.read(value))),
   ].join(" ");
   return Object.freeze({ kind: "solution", ...answer, sentence });
 }

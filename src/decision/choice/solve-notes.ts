@@ -7,6 +7,7 @@ import {
 } from "../../projection/index.js";
 import { isOfLevel, type Measure, measureOf } from "../measure/measure.js";
 import { levelWords } from "../measure/measure-words.js";
+import type { Reading } from "../measure/read-measure.js";
 import type { DecisionContext } from "../setting/decision-context.js";
 import { groundAt, type Setting } from "../setting/set-value.js";
 import { amount, percent, plain } from "../words/amount.js";
@@ -27,14 +28,14 @@ export function pastAlready(context: DecisionContext, target: Measure, setting: 
 /**
  * For a fit: what the rule does below zero with a setting at a value, as far as a measure is read from there.
  *
- * @param achieved - the measure there.
+ * @param reading - the measure there; what lies below zero by less than two of its errors is chance.
  */
 export function signNotes(
   context: DecisionContext,
   setting: Setting,
   value: number,
   measure: Measure,
-  achieved: number,
+  { value: achieved, error }: Pick<Reading, "value" | "error">,
 ): string[] {
   const { fitGround, fit, timeAt } = context;
   if (fitGround === undefined || fit === undefined) return [];
@@ -43,9 +44,14 @@ export function signNotes(
   const { unit } = fit.observations.period;
   const period = (row: number): string => `${unit} ${plain(timeAt(row), 6)}`;
   const scenario = `${setting.name} ${plain(value, 4)}`;
-  return recordedSignWarnings({ central: centralPath(ground), ground, scenario, period, last }).map(
-    ({ message }) => message,
-  );
+  return recordedSignWarnings({
+    central: centralPath(ground),
+    ground,
+    scenario,
+    period,
+    last,
+    slack: 2 * error,
+  }).map(({ message }) => message);
 }
 
 /** The last row that a measure reads. */
@@ -65,5 +71,5 @@ function lastRead({ ground, timeAt }: DecisionContext, target: Measure, achieved
 export function leftWords(left: number, paths: number, where: string = ""): string {
   if (!(left > 0)) return "";
   const share = percent(left, Math.sqrt((left * (1 - left)) / paths));
-  return ` ${share} of the paths${where} leave the range of a state; the figures are those of the others.`;
+  return ` ${share} of the paths${where} leave the range of a state: a mean is that of the others, and they count as not getting to a level.`;
 }

@@ -82,7 +82,10 @@ export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeof
   const unit = context.unitOf(vary);
   const notes = [rows[0]!, rows[rows.length - 1]!].flatMap((row) =>
     Object.entries(answers).flatMap(([shown, measure]) =>
-      signNotes(context, setting, row.value, measure, row.answers[shown]!),
+      signNotes(context, setting, row.value, measure, {
+        value: row.answers[shown]!,
+        error: row.errors[shown]!,
+      }),
     ),
   );
   return Object.freeze({

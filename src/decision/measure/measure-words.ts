@@ -1,5 +1,5 @@
 import { type CrossedLevel, type Level, levelSide } from "../../projection/index.js";
-import { amount, percent, plain } from "../words/amount.js";
+import { amount, percent, plain, withinError } from "../words/amount.js";
 import { isOfLevel, isProbability, type Measure, measureOf } from "./measure.js";
 
 /** What a measure's words need besides. */
@@ -85,8 +85,8 @@ export function measuredWords(measure: Measure, value: number, error: number, un
   const { kind, name } = measureOf(measure);
   if (kind === "share") return percent(value, error);
   if (value === Number.POSITIVE_INFINITY) return "never within the projection";
-  if (kind === "time") return `${units.periodUnit} ${plain(value, 5)}`;
-  return amount(plain(value, 5), units.unitOf(name));
+  if (kind === "time") return `${units.periodUnit} ${withinError(value, error, 5)}`;
+  return amount(withinError(value, error, 5), units.unitOf(name));
 }
 
 /** A Monte-Carlo error in the unit of what it is of: "0.2%", "0.3 months", "12 EUR". */

@@ -168,7 +168,7 @@ function isPastNow(context: DecisionContext, { place, level }: PlacedMeasure): b
   pathRunner(
     context,
     "estimates",
-    false,
+    place >= rule.states.length,
   )(({ levels }) => {
     const { sign, levels: own } = passageQuestion(rule.states.length, place, level!, levels, ground.present);
     return (t, row) => {

@@ -47,6 +47,8 @@ export function readingOf({ kind, quantile: asked }: PlacedMeasure, found: PathV
   const probability = asked ?? (kind === "time" ? 0.5 : undefined);
   if (probability !== undefined) return { ...quantileOf(live, probability), left };
   const mean = live.reduce((sum, value) => sum + value, 0) / live.length;
+  if (kind === "probability")
+    return { value: mean, error: Math.sqrt((mean * (1 - mean)) / live.length), left };
   const squares = live.reduce((sum, value) => sum + (value - mean) ** 2, 0);
   return { value: mean, error: Math.sqrt(squares / (live.length - 1) / live.length), left };
 }

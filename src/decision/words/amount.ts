@@ -23,6 +23,16 @@ export function rounded(value: number, uncertainty?: number): string {
   return plain(Math.round(value / unit) * unit, 15);
 }
 
+/** To no more digits than a Monte-Carlo error allows; to so many significant ones where there is none. */
+export function withinError(value: number, error: number, digits: number): string {
+  if (!(error > 0)) return plain(value, digits);
+  const decimals = decimalsFor(error) - 1;
+  const unit = 10 ** -Math.max(-15, Math.min(15, decimals));
+  // Not -0, which toFixed writes with its sign.
+  const whole = Math.round(value / unit) * unit + 0;
+  return decimals > 0 ? whole.toFixed(Math.min(decimals, 12)).replace(/^-(0\.?0*)$/, "$1") : plain(whole, 15);
+}
+
 /** Decimals at which an uncertainty has its second digit; negative before the decimal sign. */
 function decimalsFor(uncertainty: number): number {
   return 1 - Math.floor(Math.log10(uncertainty));
