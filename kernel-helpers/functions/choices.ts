@@ -10,6 +10,7 @@ import {
   tradeoff as tradeoffOf,
 } from "../../src/decision/index.js";
 import type { Fit } from "../../src/estimate/index.js";
+import { frozenCopy } from "../../src/numeric/index.js";
 import type { Rule } from "../../src/rule/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
@@ -26,9 +27,9 @@ import { shownTogether } from "./shown-together.js";
  *   maximize: { level: "catch", at: 100 } }).atEnd // false
  */
 export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum {
-  const found = bestSetting(subject, { seed: caseLog.seed(), ...options });
+  const found = bestSetting(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
   caseLog.noteStep(`asked which ${found.vary} is best for ${found.measure}`);
-  return showing({ ...found }, () => shownTogether(showBest(found)));
+  return showing(found, () => shownTogether(showBest(found)));
 }
 
 /**
@@ -38,9 +39,9 @@ export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum
  * @example sensitivity(fitted, { periods: 12, answer: { time: "N", risesTo: 600 } }).rows.length // 3
  */
 export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): Sensitivity {
-  const found = sensitivityOf(subject, { seed: caseLog.seed(), ...options });
+  const found = sensitivityOf(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
   caseLog.noteStep(`asked how sensitive ${found.measure} is`);
-  return showing({ ...found }, () => shownTogether(showSensitivity(found)));
+  return showing(found, () => shownTogether(showSensitivity(found)));
 }
 
 /**
@@ -52,7 +53,7 @@ export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): S
  *   answers: { lowest: { lowest: "stock" } } }).rows[0].answers.lowest // 12
  */
 export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeoff {
-  const found = tradeoffOf(subject, { seed: caseLog.seed(), ...options });
+  const found = tradeoffOf(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
   caseLog.noteStep(`set ${found.rows.length} choices of ${found.vary} side by side`);
-  return showing({ ...found }, () => shownTogether(showTradeoff(found)));
+  return showing(found, () => shownTogether(showTradeoff(found)));
 }

@@ -69,7 +69,7 @@ function pairRow(pairs: DifferenceSeries, i: number): Record<string, unknown> {
 
 /** The two scatters asked for before any model: change against value, and change per value against value. */
 function changeFigures({ observations, series }: Differences): readonly Figure[] {
-  const { every, of } = observations.period.step;
+  const { every, of } = observations.axis.step;
   const per = every === 1 ? `per ${of}` : `per ${every} ${of}`;
   return observations.states.flatMap((state) => {
     const pairs = series.filter((one) => one.state === state.name);

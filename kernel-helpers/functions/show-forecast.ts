@@ -1,6 +1,9 @@
 import type { Forecast, GroupForecast } from "../../src/projection/index.js";
+import { ruleLabel } from "../../src/rule/index.js";
 import { type FanFigureOptions, type Figure, fanFigure, type ProjectedSeries } from "../figures/index.js";
+import { groupName } from "../results/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
+import { acrossGroup, acrossRecord, periodColumn } from "./across-periods.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
 
 /** A forecast as a reader sees it: fans, then the numbers ahead, then how scenarios differ. */
@@ -9,20 +12,9 @@ export function showForecast(ahead: Forecast): readonly (Figure | Table)[] {
   return [...fanCharts(ahead), aheadTable(ahead), ...(contrast === undefined ? [] : [contrast])];
 }
 
-/** How a group and scenario are named together. */
-export function projectedName({
-  group,
-  scenario,
-}: {
-  readonly group: string;
-  readonly scenario: string;
-}): string {
-  return [group, scenario].filter((part) => part !== "").join(", ");
-}
-
 function fanCharts(ahead: Forecast): Figure[] {
   const { fit } = ahead;
-  const title = `Forecast of ${fit.rule.text}`;
+  const title = `Forecast of ${ruleLabel(fit.rule)}`;
   return fit.rule.states.flatMap((state) => {
     const factor = ahead.groups[0]!.states.find((each) => each.state === state)?.observed?.factor;
     if (factor === undefined) return [fanFigure({ ...fanOf(ahead, state), title })];
@@ -58,9 +50,8 @@ function columnOf(ahead: Forecast, state: string): string {
 
 /** A state in its own unit; with its record, unless that reads it through a factor. */
 function fanOf(ahead: Forecast, state: string): Omit<FanFigureOptions, "title"> {
-  const { period } = ahead.fit.observations;
   return {
-    x: { title: period.column, unit: period.unit },
+    x: acrossRecord(ahead.fit.observations),
     y: { title: state, unit: ahead.groups[0]!.states.find((each) => each.state === state)!.unit },
     series: ahead.groups.map((group) => {
       const { central, bands, observed } = group.states.find((each) => each.state === state)!;
@@ -74,9 +65,8 @@ function fanOf(ahead: Forecast, state: string): Omit<FanFigureOptions, "title"> 
 
 /** What the record reads of a state through a factor: the record, and observations to come. */
 function indexFanOf(ahead: Forecast, state: string): Omit<FanFigureOptions, "title"> {
-  const { period } = ahead.fit.observations;
   return {
-    x: { title: period.column, unit: period.unit },
+    x: acrossRecord(ahead.fit.observations),
     y: {
       title: columnOf(ahead, state),
       unit: ahead.groups[0]!.states.find((each) => each.state === state)!.observed!.unit,
@@ -104,7 +94,8 @@ function series(
   const end = group.index.indexOf(group.recordEnd);
   const horizon = group.predictability?.predictionHorizon;
   return {
-    name: projectedName(group),
+    name: groupName(group),
+    x: acrossGroup(recorded),
     recorded: shown.recorded
       ? { name: "recorded", x: recorded.time, y: recorded.values[name]! }
       : { name: "recorded", x: [], y: [] },
@@ -123,7 +114,7 @@ function aheadTable(ahead: Forecast): Table {
   const level = Math.max(...ahead.options.levels);
   const each = periodsShown(ahead.options.periods, ahead.groups.length * ahead.fit.rule.states.length);
   const rows = ahead.groups.flatMap((group) => rowsAhead(group, level, each));
-  const dated = ahead.groups.some((group) => group.labels !== undefined);
+  const { axis } = ahead.fit.observations;
   const number = { kind: "number", digits: 4, unit: commonUnit(ahead, (state) => state.unit) } as const;
   const future = { ...number, unit: commonUnit(ahead, (state) => state.observed?.unit ?? state.unit) };
   const scaled = ahead.groups[0]?.states.find((state) => state.observed !== undefined);
@@ -133,17 +124,9 @@ function aheadTable(ahead: Forecast): Table {
   return table({
     title: "Periods ahead",
     columns: [
-      ...several("group", "Group", ahead.groups.map(projectedName)),
+      ...several("group", "Group", ahead.groups.map(groupName)),
       ...several("state", "State", ahead.fit.rule.states),
-      dated
-        ? { key: "time", label: ahead.fit.observations.period.column, kind: "text" }
-        : {
-            key: "time",
-            label: ahead.fit.observations.period.column,
-            kind: "number",
-            digits: 6,
-            grouped: false,
-          },
+      periodColumn("time", axis.column, axis),
       { key: "central", label: "Fitted path", ...number },
       { key: "meanLower", label: `Mean path ${percent}, from`, ...number },
       { key: "meanUpper", label: "to", ...number },
@@ -193,7 +176,7 @@ function rowsAhead(group: GroupForecast, level: number, each: number): Readonly<
       !shown.has(t)
         ? []
         : {
-            group: projectedName(group),
+            group: groupName(group),
             state: state.state,
             time: group.labels?.[t] ?? group.time[t],
             central: state.central[t],
@@ -214,7 +197,7 @@ function contrastTable(ahead: Forecast): Table | undefined {
     return group.states.map((state, s) => {
       const end = group.index.length - 1;
       const difference = state.central[end]! - first.states[s]!.central[end]!;
-      return { what: projectedName(group), than: first.scenario, state: state.state, difference };
+      return { what: groupName(group), than: first.scenario, state: state.state, difference };
     });
   });
   if (rows.length === 0) return undefined;
@@ -236,6 +219,6 @@ function notesOf(ahead: Forecast): string[] {
   return [
     "Mean path: uncertainty of the parameters. Future observation: that and the error of a single value.",
     `${paths} drawn paths, seed ${seed}; quantiles by definition 7.`,
-    ...cautionsByGroup(ahead.groups.map((group) => ({ ...group, group: projectedName(group) }))),
+    ...cautionsByGroup(ahead.groups.map((group) => ({ ...group, group: groupName(group) }))),
   ];
 }

@@ -1,6 +1,7 @@
-import type { Fit, GroupFit } from "../estimate/index.js";
+import { type Fit, type GroupFit, problemOf } from "../estimate/index.js";
 import type { RandomStream } from "../numeric/index.js";
-import { readsPeriod, type StateBound } from "../rule/index.js";
+import { indexOf, labelAt, labelsAt, periodWords } from "../record/index.js";
+import { dependsOnPeriod, type StateBound } from "../rule/index.js";
 import { type CentralPath, centralPath } from "./central-path.js";
 import { keepLimit } from "./check-run.js";
 import { blockStreams } from "./ensemble/block-streams.js";
@@ -12,13 +13,11 @@ import type { ForecastOptions, ForecastSettings } from "./forecast-options.js";
 import { forecastWarnings } from "./forecast-warnings.js";
 import type { Scenario } from "./inputs/scenarios.js";
 import { centralLevels, levelSource } from "./levels.js";
-import { fittedNoise } from "./noise/fitted-noise.js";
 import { noiseDraw } from "./noise/noise.js";
 import { type DrawnStarts, drawnStarts, type UnknownsDraw, unknownsDraw } from "./parameters/drawn-starts.js";
-import { periodLabels } from "./period-labels.js";
 import { type Predictability, predictabilityOf } from "./predictability.js";
 import type { GroupForecast, ProjectedState } from "./projected-group.js";
-import { refuseNoPath } from "./refusals.js";
+import { refuseFilteredStart, refuseFrom, refuseNoPath } from "./refusals.js";
 import { observableRange, runBounds } from "./state-range.js";
 
 type Settled = ForecastOptions & ForecastSettings;
@@ -31,10 +30,23 @@ export function forecastGroup(
   options: Settled,
   stream: RandomStream,
 ): readonly GroupForecast[] {
-  const grounds = scenarios.map(({ plans }) => fitGround(fit, group, options.periods, plans));
+  const after = startsAfter(fit, group, options.from);
+  const grounds = scenarios.map(({ plans }) => fitGround(fit, group, options.periods, plans, after));
   const source = unknownsDraw(fit, group);
   const seeds = blockStreams(stream, options.paths);
   return grounds.map((ground, i) => projected(fit, ground, scenarios[i]!, options, source, seeds));
+}
+
+/** The index of the period to start after; undefined for the last recorded one. */
+function startsAfter(fit: Fit, { group }: GroupFit, from: ForecastOptions["from"]): number | undefined {
+  if (from === undefined) return undefined;
+  const { axis, index } = fit.observations.groups.find(({ name }) => name === group)!;
+  const last = index[index.length - 1]!;
+  const found = indexOf(axis, from);
+  if (found === undefined || found < 0 || found > last)
+    throw refuseFrom(from, labelAt(axis, 0), labelAt(axis, last));
+  if (problemOf(fit).kind === "state-space" && found < last) throw refuseFilteredStart(from);
+  return found;
 }
 
 function projected(
@@ -45,7 +57,7 @@ function projected(
   source: UnknownsDraw,
   seeds: readonly RandomStream[],
 ): GroupForecast {
-  const { rule, observations } = fit;
+  const { rule } = fit;
   const { group, from, recordEnd, periods } = ground;
   const central = centralPath(ground);
   if (central.stop !== undefined && central.stop.row + from <= recordEnd)
@@ -65,18 +77,16 @@ function projected(
     row <= ground.present + horizon ? value : Number.NaN;
   const shown = central.values.map((values) => values.map(within));
   const index = Array.from({ length: periods + 1 }, (_, t) => from + t);
-  const step = observations.period.step.every;
-  const labels = periodLabels(observations, ground.recorded, index);
-  const time = index.map((t) => ground.recorded.time[0]! + t * step);
-  const period = (row: number): string =>
-    labels?.[row] ?? `${observations.period.unit} ${Number(time[row]!.toPrecision(6))}`;
+  const { axis, time: recordedTime } = ground.recorded;
+  const time = index.map((t) => recordedTime[0]! + t * axis.step.every);
   return {
     group: group.group,
     scenario: scenario.name,
     plans: scenario.plans,
+    axis,
     index,
     time,
-    ...(labels && { labels }),
+    ...(axis.counts !== "numbers" && { labels: labelsAt(axis, index) }),
     recordEnd,
     states: projectedStates(fit, ground, shown, means, future.states()),
     ensemble: {
@@ -102,7 +112,7 @@ function projected(
       starts,
       central: { ...central, values: shown },
       scenario: scenario.name,
-      period,
+      period: (row) => periodWords(axis, from + row),
       left,
       bounds,
       passed: process.passed,
@@ -168,7 +178,7 @@ function runBoth(
   const { rule } = fit;
   const states = rule.states.length;
   const quantities = rule.quantities.length;
-  const { change, reading } = fittedNoise(fit, ground.group);
+  const { change, reading } = problemOf(fit).group(ground.group.group).noise;
   const alike = change.every((noise) => noise === undefined);
   const keep = starts.paths * (ground.periods + 1) * (states + quantities) <= keepLimit;
   const shared = {
@@ -213,7 +223,7 @@ function runBoth(
 
 function predicted(ground: FitGround, starts: DrawnStarts, firstError: number): Predictability | undefined {
   const { rule, compiled, parameters, initial } = ground;
-  if (rule.inputs.length > 0 || readsPeriod(rule)) return undefined;
+  if (rule.inputs.length > 0 || dependsOnPeriod(rule)) return undefined;
   const own = { paths: 1, size: parameters.length, parameters, initial };
   return predictabilityOf(compiled, initial.length, own, starts, firstError);
 }

@@ -36,12 +36,24 @@ const worthTelling = 0.05;
 export function forecastWarnings(source: WarningSource): Warning[] {
   const { starts, ground } = source;
   return [
+    ...startedEarlier(source),
     ...openParameters(source),
     ...discardedDraws(starts),
     ...rangeWarnings({ ...source, rule: ground.rule, paths: starts.paths }),
     ...recordedSignWarnings(source),
     ...beyondRecord(source),
     ...partingPaths(source.predictability),
+  ];
+}
+
+function startedEarlier({ ground, period }: WarningSource): Warning[] {
+  const { recorded, recordEnd, from } = ground;
+  if (recordEnd === recorded.index[recorded.index.length - 1]) return [];
+  return [
+    {
+      code: "starts-inside-record",
+      message: `The forecast starts after ${period(recordEnd - from)}; its parameters were estimated from the whole record, later rows included.`,
+    },
   ];
 }
 

@@ -15,8 +15,6 @@ export {
 export { type FitGround, fitGround } from "./fit-ground.js";
 export { type Forecast, forecast } from "./forecast.js";
 export type { ForecastOptions } from "./forecast-options.js";
-export type { InputPlan, InputPlans } from "./inputs/input-plan.js";
-export { plannedInputs } from "./inputs/planned-inputs.js";
 export type { Scenarios } from "./inputs/scenarios.js";
 export {
   type CrossedLevel,
@@ -33,7 +31,6 @@ export {
   sameLevel,
   startNames,
 } from "./levels.js";
-export { fittedNoise } from "./noise/fitted-noise.js";
 export { type Noise, type NoiseDraw, noiseDraw } from "./noise/noise.js";
 export { ruleNoise } from "./noise/rule-noise.js";
 export { type DrawnStarts, drawnStarts, type UnknownsDraw, unknownsDraw } from "./parameters/drawn-starts.js";

@@ -117,10 +117,10 @@ export function checkLevel(rule: Rule, name: string, asked: CrossedLevel): void 
 
 /** What each place of a rule's first state vector is called, as in "N[0]"; with past values the oldest is 0. */
 export function startNames(rule: Rule): readonly string[] {
-  const reach = Math.max(0, ...rule.memory.map(({ lag }) => lag));
+  const reach = Math.max(0, ...rule.lags.map(({ lag }) => lag));
   return [
     ...rule.states.map((state) => `${state}[${reach}]`),
-    ...rule.memory.map(({ state, lag }) => `${state}[${reach - lag}]`),
+    ...rule.lags.map(({ state, lag }) => `${state}[${reach - lag}]`),
   ];
 }
 

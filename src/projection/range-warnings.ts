@@ -26,7 +26,7 @@ export function rangeWarnings(source: RangeSource): Warning[] {
   if (stop !== undefined)
     found.push({
       code: "path-leaves-range",
-      message: `At ${period(stop.row)} the rule gives ${stop.state} = ${Number(stop.value.toPrecision(4))}, outside its range; the path without random change stops at ${period(stop.row - 1)}.`,
+      message: `At ${period(stop.row)} the rule gives ${stop.state} = ${Number(stop.value.toPrecision(4))}, outside its range; the path without random change stops at ${period(Math.max(0, stop.row - 1))}.`,
     });
   if (left > 0 && paths > 1)
     found.push({

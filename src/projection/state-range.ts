@@ -24,7 +24,7 @@ const anything: Interval = [Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY];
  */
 export function observableRange(rule: Rule): readonly Interval[] {
   const next = stepOver(rule, intervalAlgebra).next({
-    state: new Array<Interval>(rule.states.length + rule.memory.length).fill(anything),
+    state: new Array<Interval>(rule.states.length + rule.lags.length).fill(anything),
     parameters: rule.parameters.map(() => anything),
     input: () => anything,
     t: [0, Number.POSITIVE_INFINITY],

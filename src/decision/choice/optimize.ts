@@ -115,7 +115,7 @@ export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum
   };
   const notes = signNotes(context, setting, answer.value, measure, best);
   const sentence = [bestSentence(answer, measure, sign, context), ...notes].join(" ");
-  return Object.freeze({ kind: "optimum", ...answer, sentence });
+  return { kind: "optimum", ...answer, sentence };
 }
 
 interface Heights {

@@ -70,15 +70,15 @@ export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): S
   const rows = names
     .map((name) => rowOf(context, name, reader, answer))
     .sort((a, b) => effect(b) - effect(a));
-  return Object.freeze({
+  return {
     kind: "sensitivity",
     measure: measureWords(options.answer, context),
     unit: measureUnit(options.answer, context),
     answer,
     answerError,
-    rows: Object.freeze(rows),
+    rows,
     sentence: `${sentenceOf(options.answer, answer, answerError, rows, context)}${leftWords(left, context.paths)}`,
-  });
+  };
 }
 
 function movable({ rule, fitGround }: DecisionContext): readonly string[] {

@@ -86,7 +86,7 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
       .slice(0, 1)
       .flatMap(({ value }) => signNotes(context, setting, value, until, search.read(value))),
   ].join(" ");
-  return Object.freeze({ kind: "solution", ...answer, sentence });
+  return { kind: "solution", ...answer, sentence };
 }
 
 /** The value asked for; of a probability between 0 and 1. */

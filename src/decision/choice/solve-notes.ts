@@ -37,12 +37,11 @@ export function signNotes(
   measure: Measure,
   { value: achieved, error }: Pick<Reading, "value" | "error">,
 ): string[] {
-  const { fitGround, fit, timeAt } = context;
+  const { fitGround, fit, timeAt, timeWords } = context;
   if (fitGround === undefined || fit === undefined) return [];
   const ground: FitGround = { ...fitGround, ...groundAt(context, { setting, value }) };
   const last = lastRead(context, measure, achieved);
-  const { unit } = fit.observations.period;
-  const period = (row: number): string => `${unit} ${plain(timeAt(row), 6)}`;
+  const period = (row: number): string => timeWords(timeAt(row));
   const scenario = `${setting.name} ${plain(value, 4)}`;
   return recordedSignWarnings({
     central: centralPath(ground),

@@ -33,7 +33,7 @@ function broughtWords(
   context: DecisionContext,
 ): string {
   if ("time" in target && target.atLeast !== undefined && !context.random)
-    return `${reachWords(target.time, target, context)} not before ${context.periodUnit} ${plain(target.atLeast, 5)}`;
+    return `${reachWords(target.time, target, context)} not before ${context.timeWords(target.atLeast)}`;
   return measuredClause(target, achieved, achievedError, context);
 }
 

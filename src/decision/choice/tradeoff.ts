@@ -88,15 +88,15 @@ export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeof
       }),
     ),
   );
-  return Object.freeze({
+  return {
     kind: "tradeoff",
     vary,
     unit,
-    measures: Object.freeze(measures),
+    measures,
     answers,
-    rows: Object.freeze(rows),
+    rows,
     sentence: [sentenceOf(vary, unit, rows, answers, context), ...new Set(notes)].join(" "),
-  });
+  };
 }
 
 function valuesOf(values: TradeoffOptions["values"]): readonly number[] {

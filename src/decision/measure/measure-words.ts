@@ -6,6 +6,8 @@ import { isOfLevel, isProbability, type Measure, measureOf } from "./measure.js"
 export interface MeasureUnits {
   readonly unitOf: (name: string) => string;
   readonly periodUnit: string;
+  /** A time of the period column: "month 120", or a label where periods have them; to no more digits than its error allows. */
+  readonly timeWords: (time: number, error?: number) => string;
   /** A level relative to a parameter or a first value as a number, at the estimates. */
   readonly levelAt: (level: CrossedLevel) => number;
   /** Whether the paths are moved by chance, so that a measure is one of their distribution. */
@@ -85,7 +87,7 @@ export function measuredWords(measure: Measure, value: number, error: number, un
   const { kind, name } = measureOf(measure);
   if (kind === "share") return percent(value, error);
   if (value === Number.POSITIVE_INFINITY) return "never within the projection";
-  if (kind === "time") return `${units.periodUnit} ${withinError(value, error, 5)}`;
+  if (kind === "time") return units.timeWords(value, error);
   return amount(withinError(value, error, 5), units.unitOf(name));
 }
 

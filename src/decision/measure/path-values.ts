@@ -7,7 +7,7 @@ import {
   passageQuestion,
   pastBy,
 } from "../../projection/index.js";
-import { roughness } from "../../rule/index.js";
+import { nonsmoothCalls } from "../../rule/index.js";
 import type { DecisionContext } from "../setting/decision-context.js";
 import type { Choice } from "../setting/set-value.js";
 import type { PlacedMeasure } from "./measure.js";
@@ -123,7 +123,7 @@ function passageReader(
 ): PathReader {
   const { rule, ground, timeAt } = context;
   const { place, first, last, level } = measure;
-  const { kinks, jumps } = roughness(rule);
+  const { kinks, jumps } = nonsmoothCalls(rule);
   const smooth =
     !(isMoved(kind) && context.random) && rule.inputs.length === 0 && kinks.length + jumps.length === 0;
   const since = measure.kind === "time" && isPastNow(context, measure) ? 0 : ground.present;

@@ -12,7 +12,7 @@ import {
   type Simulation,
   sameLevel,
 } from "../../projection/index.js";
-import { type Rule, roughness } from "../../rule/index.js";
+import { nonsmoothCalls, type Rule } from "../../rule/index.js";
 import { notWatchedError } from "../errors.js";
 import type { ReachQuestion } from "./reach.js";
 
@@ -37,7 +37,7 @@ export function groupQuestion(
 ): GroupQuestion {
   const fit = ahead.kind === "forecast" ? ahead.fit : undefined;
   const rule = ahead.kind === "forecast" ? ahead.fit.rule : ahead.rule;
-  const { kinks, jumps } = roughness(rule);
+  const { kinks, jumps } = nonsmoothCalls(rule);
   const place = placeOf(rule, asked.state);
   const present = group.index.indexOf(group.recordEnd);
   const { sign, levels } = passageQuestion(

@@ -1,3 +1,4 @@
+import { problemOf } from "../../estimate/index.js";
 import { quantile } from "../../numeric/index.js";
 import {
   centralLevels,
@@ -10,7 +11,7 @@ import {
   pastBy,
   type Simulation,
 } from "../../projection/index.js";
-import { plain } from "../words/amount.js";
+import { periodWords } from "../../record/index.js";
 import { type DeltaMargin, deltaMargin } from "./delta-margin.js";
 import {
   counted,
@@ -112,24 +113,23 @@ function recordedPast(
   group: GroupForecast,
   question: GroupQuestion,
 ): { readonly time: number; readonly words: string } | undefined {
-  const { fit, state, periodUnit } = question;
+  const { fit, state } = question;
   const recorded = fit?.observations.groups.find((each) => each.name === group.group);
   const values = recorded?.values[state];
   // A record that reads the state through a factor is on another scale.
-  if (recorded === undefined || values === undefined || fit?.options.factor?.[state] !== undefined)
+  if (recorded === undefined || values === undefined || problemOf(fit!).factors[state] !== undefined)
     return undefined;
   const { sign, levels } = counted(question, group.ensemble.levels.central, 0);
   const at = values.findIndex((each) => pastBy(each, levels[0]!, sign) >= 0);
   if (at <= 0) return undefined;
-  const time = recorded.time[at]!;
-  return { time, words: recorded.labels?.[at] ?? `${periodUnit} ${plain(time, 6)}` };
+  return { time: recorded.time[at]!, words: periodWords(recorded.axis, recorded.index[at]!) };
 }
 
 function meanPath(group: GroupForecast, question: GroupQuestion, periods: number): DeltaMargin | undefined {
   const { fit, place, from, smooth } = question;
   const fitted = fit?.groups.find((each) => each.group === group.group);
   if (fit === undefined || fitted === undefined) return undefined;
-  const ground = fitGround(fit, fitted, periods, group.plans);
+  const ground = fitGround(fit, fitted, periods, group.plans, group.recordEnd);
   return deltaMargin(fit, ground, question.level, (own) => {
     const asked = counted(question, centralLevels(own), from);
     const at = firstPassage(centralPath(own).kept[place]!, 0, asked, smooth);

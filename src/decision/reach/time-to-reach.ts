@@ -1,5 +1,6 @@
+import { problemOf } from "../../estimate/index.js";
 import { checkLevel, crossedLevel, type Forecast, placeOf, type Simulation } from "../../projection/index.js";
-import type { Rule } from "../../rule/index.js";
+import { type Rule, ruleLabel } from "../../rule/index.js";
 import { fewUnitsError, levelError } from "../errors.js";
 import { acrossUnits } from "./across-units.js";
 import { groupReach } from "./group-reach.js";
@@ -29,19 +30,19 @@ export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOp
   const question = questionOf(ahead, ruleOf(ahead), options);
   const groups = ahead.groups.map((group) => {
     const answer = groupReach(ahead, group, question);
-    return Object.freeze({ ...answer, sentence: groupSentence(ahead, answer, question) });
+    return { ...answer, sentence: groupSentence(ahead, answer, question) };
   });
   const asked = options.newUnit === true && ahead.kind === "forecast";
   if (asked && groups.length < 3) throw fewUnitsError(groups.length);
   const across = asked ? acrossUnits(groups, question.level) : undefined;
   const sentence = reachSentence(ahead, groups, across, question);
-  return Object.freeze({
+  return {
     kind: "time-to-reach",
     ...question,
-    groups: Object.freeze(groups),
+    groups,
     across,
     sentence,
-  });
+  };
 }
 
 function ruleOf(ahead: Forecast | Simulation): Rule {
@@ -53,10 +54,10 @@ function questionOf(ahead: Forecast | Simulation, rule: Rule, options: TimeToRea
   placeOf(rule, state);
   checkLevel(rule, state, options);
   if (!(level > 0 && level < 1)) throw levelError(level);
-  const period = ahead.kind === "forecast" ? ahead.fit.observations.period.unit : ahead.options.period;
+  const period = ahead.kind === "forecast" ? ahead.fit.observations.axis.unit : ahead.options.period;
   const projected = ahead.groups[0]!.states.find((each) => each.state === state);
   return {
-    rule: rule.text,
+    rule: ruleLabel(rule),
     state,
     unit: projected?.unit ?? rule.units[state] ?? "",
     periodUnit: period,
@@ -68,5 +69,6 @@ function questionOf(ahead: Forecast | Simulation, rule: Rule, options: TimeToRea
 
 function marginOf(ahead: Forecast | Simulation): TimeToReach["margin"] {
   if (ahead.kind === "simulation") return "random change";
-  return ahead.fit.options.errors === "observation" ? "parameters" : "parameters and process errors";
+  const { change } = problemOf(ahead.fit).group(ahead.groups[0]!.group).noise;
+  return change.every((noise) => noise === undefined) ? "parameters" : "parameters and process errors";
 }

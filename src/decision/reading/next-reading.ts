@@ -1,6 +1,7 @@
 import type { Fit } from "../../estimate/index.js";
 import { randomStream } from "../../numeric/index.js";
 import { placeOf } from "../../projection/index.js";
+import type { PeriodAxis } from "../../record/index.js";
 import { noCandidateError, noPurposeError, probabilityAnswerError } from "../errors.js";
 import { isProbability, type Measure, placedMeasure } from "../measure/measure.js";
 import { measureWords } from "../measure/measure-words.js";
@@ -59,7 +60,9 @@ export interface NextReading {
   readonly purpose: "narrow the answer" | "tell the rules apart";
   readonly state: string;
   readonly replicates: number;
-  readonly periodUnit: string;
+  readonly axis: PeriodAxis;
+  /** Time of period 0 of the axis. */
+  readonly zero: number;
   /** By time. */
   readonly choices: readonly ReadingChoice[];
   /** The one that is worth most among those that do not come too late; of all where all do. */
@@ -116,17 +119,18 @@ export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOpti
     purpose: answer === undefined ? ("tell the rules apart" as const) : ("narrow the answer" as const),
     state,
     replicates,
-    periodUnit: context.periodUnit,
-    choices: Object.freeze(choices),
+    axis: context.axis,
+    zero: context.zero,
+    choices,
     recommended: mostWorth(choices),
     event,
   };
   const about = answer === undefined ? "" : measureWords(answer, context);
-  return Object.freeze({
+  return {
     kind: "next-reading",
     ...found,
-    sentence: readingSentence(found, about, rivals.length),
-  });
+    sentence: readingSentence(found, context.timeWords, about, rivals.length),
+  };
 }
 
 /** The choice that is worth most; one that comes too late only where all do. */
@@ -181,7 +185,7 @@ function candidates(
   when: NextReadingOptions["values"],
 ): readonly { readonly time: number; readonly rows: readonly number[] }[] {
   const { context } = rivals[0]!;
-  const process = rivals.some((rival) => rival.context.fit!.options.errors !== "observation");
+  const process = rivals.some((rival) => rival.context.random);
   const times = Array.from({ length: context.ground.periods + 1 }, (_, row) => context.timeAt(row));
   const wanted = (time: number): boolean => {
     if (when === undefined) return time > context.timeAt(context.ground.present);

@@ -1,39 +1,45 @@
-import { type InitialValues, initialVector, parametersBySlot } from "../../dynamics/index.js";
-import type { Fit, GroupFit } from "../../estimate/index.js";
+import {
+  type InitialValues,
+  type InputPlans,
+  initialFrom,
+  initialVector,
+  inputsFrom,
+  parametersBySlot,
+  planOfGroup,
+  runStart,
+  type StartOptions,
+} from "../../dynamics/index.js";
+import { type Fit, type GroupFit, problemOf } from "../../estimate/index.js";
 import { type RandomStream, randomStream } from "../../numeric/index.js";
 import {
   centralLevels,
   type FitGround,
   fitGround,
-  fittedNoise,
   type Ground,
-  type InputPlans,
   levelValues,
   type Noise,
-  plannedInputs,
   ruleNoise,
   startNames,
 } from "../../projection/index.js";
+import { labelBetween, type PeriodAxis } from "../../record/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../../rule/index.js";
 import { groupError } from "../errors.js";
 import type { MeasureUnits } from "../measure/measure-words.js";
+import { withinError } from "../words/amount.js";
 
 /** What a decision is worked out from, beside the rule or fit itself. */
-export interface DecisionOptions {
+export interface DecisionOptions extends StartOptions {
   /** Whole periods ahead. */
   readonly periods: number;
   /** By input: its plan. For a fit the first period ahead comes first, for a rule period 0. */
   readonly inputs?: InputPlans;
-  /** Of a fit with several groups: which one. */
+  /** Of a fit or a record with several groups: which one. */
   readonly group?: string;
   /** Of a rule: its parameters and first values. */
   readonly parameters?: Readonly<Record<string, number>>;
   readonly initial?: InitialValues;
   /** Of a rule: random change by state; every measure is then one of the paths' distribution. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** Of a rule: what a period is called, and what the present one is numbered; default "period" and 0. */
-  readonly period?: string;
-  readonly startsAt?: number;
   /** Paths where chance has a part; default 4000. */
   readonly paths?: number;
   /** Default 1. */
@@ -47,6 +53,9 @@ export interface DecisionContext extends MeasureUnits {
   readonly ground: Ground;
   /** Of a fit. */
   readonly fitGround: FitGround | undefined;
+  readonly axis: PeriodAxis;
+  /** Time of period 0 of the axis, in the period column's unit. */
+  readonly zero: number;
   /** The period column's value at a row. */
   readonly timeAt: (row: number) => number;
   /** By state: the random change at parameters of its own, because its size may be one of them. */
@@ -72,7 +81,6 @@ export function decisionContext(subject: Fit | Rule, options: DecisionOptions): 
   const { ground } = own;
   return {
     ...own,
-    plans: options.inputs ?? {},
     paths: options.paths ?? 4000,
     seed: options.seed ?? 1,
     random: own.changeAt(ground.parameters).some((noise) => noise !== undefined),
@@ -80,22 +88,29 @@ export function decisionContext(subject: Fit | Rule, options: DecisionOptions): 
   };
 }
 
-type OwnContext = Omit<DecisionContext, "plans" | "paths" | "seed" | "random" | "levelAt">;
+type OwnContext = Omit<DecisionContext, "paths" | "seed" | "random" | "levelAt">;
 
 function fitContext(fit: Fit, options: DecisionOptions): OwnContext {
   const { rule, observations } = fit;
   const [group, place] = groupOf(fit, options.group);
   const planned = (plans: InputPlans): FitGround => fitGround(fit, group, options.periods, plans);
-  const ground = planned(options.inputs ?? {});
+  const plans = Object.fromEntries(
+    Object.entries(options.inputs ?? {}).map(([name, plan]) => [name, planOfGroup(name, plan, group.group)]),
+  );
+  const ground = planned(plans);
   const first = ground.recorded.time[0]!;
-  const step = observations.period.step.every;
+  const { axis } = ground.recorded;
   return {
     rule,
     fit,
     ground,
     fitGround: ground,
-    timeAt: (row) => first + (ground.from + row) * step,
-    changeAt: () => fittedNoise(fit, group).change,
+    axis,
+    zero: first,
+    timeAt: (row) => first + (ground.from + row) * axis.step.every,
+    timeWords: timeWordsOf(axis, first),
+    changeAt: () => problemOf(fit).group(group.group).noise.change,
+    plans,
     stream: () =>
       Array.from({ length: place }).reduce<RandomStream>(
         (own) => own.jump(),
@@ -108,7 +123,7 @@ function fitContext(fit: Fit, options: DecisionOptions): OwnContext {
       const recorded = observations.states.find((each) => each.name === state)?.unit;
       return (scaled ? undefined : recorded) || (rule.units[state] ?? "");
     },
-    periodUnit: observations.period.unit,
+    periodUnit: axis.unit,
   };
 }
 
@@ -123,23 +138,36 @@ function groupOf(fit: Fit, name: string | undefined): readonly [GroupFit, number
 function ruleContext(rule: Rule, options: DecisionOptions): OwnContext {
   const { periods } = options;
   const parameters = parametersBySlot(rule, options.parameters);
-  const initial = initialVector(rule, options.initial);
+  const start = runStart(options);
+  const { axis, from, recorded } = start;
+  const initial = initialVector(rule, initialFrom(rule, start, options.initial));
   const compiled = compileRule(rule);
   const planned = (plans: InputPlans): Ground => {
-    const inputs = plannedInputs(rule, plans, { recorded: () => [], rows: 0, last: periods, firstNumber: 0 });
-    const start = { startNames: startNames(rule), firstValues: {}, from: 0, present: 0 };
-    return { rule, compiled, parameters, initial, inputs, periods, ...start };
+    const inputs = inputsFrom(rule, start, periods, plans);
+    const named = { startNames: startNames(rule), firstValues: {} };
+    return { rule, compiled, parameters, initial, inputs, from, periods, present: 0, ...named };
   };
+  const first = recorded?.time[0] ?? (axis.counts === "numbers" ? axis.origin : 0);
   return {
     rule,
     fit: undefined,
     ground: planned(options.inputs ?? {}),
     fitGround: undefined,
-    timeAt: (row) => row + (options.startsAt ?? 0),
+    axis,
+    zero: first,
+    timeAt: (row) => first + (from + row) * axis.step.every,
+    timeWords: timeWordsOf(axis, first),
+    plans: options.inputs ?? {},
     changeAt: (at) => ruleNoise(rule, at, options.noise),
     stream: () => randomStream(options.seed ?? 1),
     planned,
     unitOf: (name) => rule.units[stateOf(name)] ?? "",
-    periodUnit: options.period ?? "period",
+    periodUnit: axis.unit,
   };
+}
+
+/** A time of the period column in a sentence; `zero` is that of period 0. */
+function timeWordsOf(axis: PeriodAxis, zero: number): DecisionContext["timeWords"] {
+  if (axis.counts === "numbers") return (time, error = 0) => `${axis.unit} ${withinError(time, error, 5)}`;
+  return (time) => labelBetween(axis, 0, (time - zero) / axis.step.every);
 }

@@ -1,4 +1,6 @@
-import type { Ground, InputPlan } from "../../projection/index.js";
+import type { InputPlan } from "../../dynamics/index.js";
+import { problemOf } from "../../estimate/index.js";
+import type { Ground } from "../../projection/index.js";
 import { type DecisionContext, stateOf } from "./decision-context.js";
 
 /** Something that can be set: a parameter, a first value "N[0]", or the usual level of an input. */
@@ -29,7 +31,7 @@ const open: readonly [number, number] = [Number.NEGATIVE_INFINITY, Number.POSITI
 export function settingOf(context: DecisionContext, name: string): Setting {
   const { rule, ground, plans } = context;
   const parameter = rule.parameters.indexOf(name);
-  const bounds = context.fit?.options.bounds?.[name] ?? rule.bounds[name] ?? open;
+  const bounds = context.fit ? problemOf(context.fit).bounds(name) : (rule.bounds[name] ?? open);
   if (parameter >= 0)
     return { name, role: "parameter", slot: parameter, bounds, now: ground.parameters[parameter]! };
   const state = rule.states.indexOf(stateOf(name));

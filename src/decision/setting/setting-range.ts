@@ -1,4 +1,4 @@
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import type { Rule } from "../../rule/index.js";
 import { multipleError, rangeError, unknownSettingError } from "../errors.js";
 import { type DecisionOptions, isFit, stateOf } from "./decision-context.js";
@@ -51,8 +51,7 @@ function contradiction(
   multiple: number | undefined,
 ): string | undefined {
   const own = isFit(subject) ? subject.rule : subject;
-  const [low, high] = (isFit(subject) ? subject.options.bounds?.[vary] : undefined) ??
-    own.bounds[vary] ?? [from, to];
+  const [low, high] = isFit(subject) ? problemOf(subject).bounds(vary) : (own.bounds[vary] ?? [from, to]);
   if (!(from < to)) return "the first must be the smaller one";
   if (to < low || from > high) return `the rule bounds ${vary} to ${low} to ${high}`;
   const none = multiple !== undefined && Math.floor(to / multiple) < Math.ceil(from / multiple);

@@ -1,27 +1,27 @@
+import { type PeriodAxis, periodWords } from "../../record/index.js";
 import {
   compileRule,
   explainFailure,
   quantitiesAt,
   type Rule,
-  type StepPlace,
+  type StepArguments,
   stateBounds,
 } from "../../rule/index.js";
+import type { InputPlans } from "../inputs/input-plan.js";
+import { initialFrom, inputsFrom, runStart, type StartOptions } from "../inputs/run-start.js";
 import { unreadableOption } from "../refusals.js";
-import { type InputValues, inputColumns } from "../setting/input-columns.js";
 import { type InitialValues, initialVector, parametersBySlot } from "../setting/setting.js";
 import { namedValues, refuseOutsideRange } from "../setting/valid-range.js";
 import { type BoundedPath, boundedPath, type PathRun } from "./bounded-path.js";
 
-export interface TrajectoryOptions {
+export interface TrajectoryOptions extends StartOptions {
   /** By parameter; those the rule holds fixed may be left out. */
   readonly parameters?: Readonly<Record<string, number>>;
   /** By state; those the rule states may be left out. */
   readonly initial?: InitialValues;
   readonly periods: number;
-  /** By input: values by absolute period. */
-  readonly inputs?: InputValues;
-  /** Absolute period of the first value; default 0. */
-  readonly startsAt?: number;
+  /** By input: what it will be, from the first period on. */
+  readonly inputs?: InputPlans;
 }
 
 /** Why a path ends where it does. */
@@ -37,7 +37,10 @@ export interface Trajectory {
   readonly kind: "trajectory";
   readonly rule: Rule;
   readonly parameters: Readonly<Record<string, number>>;
+  /** The index of the first period, `t` in the rule. */
   readonly startsAt: number;
+  /** The axis that names the periods: `startsAt` and those after it. */
+  readonly axis: PeriodAxis;
   /** Periods that have a value, not counting the first. */
   readonly periods: number;
   /** By state: [periods + 1]. */
@@ -59,11 +62,12 @@ export interface Absorption {
 /** A run with its path, by slot. */
 interface Run extends PathRun {
   readonly rule: Rule;
+  readonly axis: PeriodAxis;
   readonly width: number;
   readonly path: BoundedPath;
 }
 
-function placeAt({ path, width, parameters, inputs, from }: Run, row: number): StepPlace {
+function placeAt({ path, width, parameters, inputs, from }: Run, row: number): StepArguments {
   return { state: path.table.subarray(row * width, (row + 1) * width), parameters, inputs, t: from + row };
 }
 
@@ -82,25 +86,23 @@ function endOf(run: Run): End {
   if (!Number.isFinite(value)) {
     const failure = row === 0 ? undefined : explainFailure(rule, placeAt(run, row - 1));
     const cause = failure === undefined ? "" : `: ${failure.reason}`;
-    const reason = `The rule leaves the finite range at period ${period}${cause}.`;
+    const reason = `The rule leaves the finite range at ${periodWords(run.axis, period)}${cause}.`;
     return { rows: row, stop: { kind: "left-finite-range", period, reason } };
   }
   path.table[row * width + state] = value;
   const name = rule.states[state]!;
   const [low, high] = rule.bounds[name]!;
-  const reason = `${name} leaves its bounds ${low} to ${high} at period ${period}, with ${value}; further values would mean nothing.`;
+  const reason = `${name} leaves its bounds ${low} to ${high} at ${periodWords(run.axis, period)}, with ${value}; further values would mean nothing.`;
   return { rows: row + 1, stop: { kind: "left-bounds", period, reason } };
 }
 
 function absorptionsOf({ rule, path, from, width }: Run): readonly Absorption[] {
   const found = path.reached.filter(({ absorbed }) => absorbed);
-  return found.map(({ row, state }) =>
-    Object.freeze({
-      state: rule.states[state]!,
-      period: from + row,
-      bound: path.table[row * width + state]!,
-    }),
-  );
+  return found.map(({ row, state }) => ({
+    state: rule.states[state]!,
+    period: from + row,
+    bound: path.table[row * width + state]!,
+  }));
 }
 
 function quantityColumns(run: Run, rows: number): Readonly<Record<string, Float64Array>> {
@@ -112,7 +114,7 @@ function quantityColumns(run: Run, rows: number): Readonly<Record<string, Float6
       columns[k]![row] = value;
     });
   }
-  return Object.freeze(Object.fromEntries(quantities.map((name, k) => [name, columns[k]!])));
+  return Object.fromEntries(quantities.map((name, k) => [name, columns[k]!]));
 }
 
 /**
@@ -122,39 +124,37 @@ function quantityColumns(run: Run, rows: number): Readonly<Record<string, Float6
  * @param options.periods - steps to take, a whole number from 0.
  * @returns the values by state [periods + 1], and why the path ends: it stops before a value that is not finite, and
  *   with one beyond a bound that does not absorb.
- * @throws {ModelError} `missing-value` | `unknown-name` | `wrong-history` | `missing-input` | `unreadable-option`.
+ * @throws {ModelError} `missing-value` | `unknown-name` | `wrong-history` | `missing-input` | `future-input-missing` |
+ *   `plan-not-readable` | `start-not-readable` | `unreadable-option`.
  * @example trajectory(recurrence("N[t+1] = R*N"), { parameters: { R: 2 }, initial: { N: 3 }, periods: 2 }).values.N; // 3, 6, 12
  */
 export function trajectory(rule: Rule, options: TrajectoryOptions): Trajectory {
-  const { periods, startsAt: from = 0 } = options;
+  const { periods } = options;
   if (!Number.isSafeInteger(periods) || periods < 0) {
     throw unreadableOption("periods", "a whole number from 0 on", periods);
   }
-  if (!Number.isSafeInteger(from)) throw unreadableOption("startsAt", "a whole number", from);
+  const start = runStart(options);
+  const { from, axis } = start;
   const parameters = parametersBySlot(rule, options.parameters);
-  const initial = initialVector(rule, options.initial);
+  const initial = initialVector(rule, initialFrom(rule, start, options.initial));
   refuseOutsideRange(rule, namedValues(rule, parameters, initial));
-  const inputs = inputColumns(rule, options.inputs, from, periods);
-  const compiled = compileRule(rule);
+  const inputs = inputsFrom(rule, start, periods, options.inputs ?? {});
   const own = { initial, parameters, inputs, from, periods };
-  const run: Run = {
-    ...own,
-    rule,
-    width: initial.length,
-    path: boundedPath(compiled, stateBounds(rule), own),
-  };
+  const path = boundedPath(compileRule(rule), stateBounds(rule), own);
+  const run: Run = { ...own, rule, axis, width: initial.length, path };
   const { rows, stop } = endOf(run);
   const column = (slot: number): Float64Array =>
-    Float64Array.from({ length: rows }, (_, row) => run.path.table[row * run.width + slot]!);
-  return Object.freeze({
+    Float64Array.from({ length: rows }, (_, row) => path.table[row * run.width + slot]!);
+  return {
     kind: "trajectory",
     rule,
-    parameters: Object.freeze(Object.fromEntries(rule.parameters.map((name, i) => [name, parameters[i]!]))),
+    parameters: Object.fromEntries(rule.parameters.map((name, i) => [name, parameters[i]!])),
     startsAt: from,
+    axis,
     periods: rows - 1,
-    values: Object.freeze(Object.fromEntries(rule.states.map((name, slot) => [name, column(slot)]))),
+    values: Object.fromEntries(rule.states.map((name, slot) => [name, column(slot)])),
     quantities: quantityColumns(run, rows),
-    stop: Object.freeze(stop),
-    absorbed: Object.freeze(absorptionsOf(run)),
-  });
+    stop,
+    absorbed: absorptionsOf(run),
+  };
 }

@@ -21,7 +21,8 @@ export interface GroupFit {
   readonly degreesOfFreedom: number;
   /** sqrt(RSS/(n - p)), on the fitting scale. */
   readonly sigma: number;
-  readonly criteria: Criteria;
+  /** Absent where groups are fitted together: the fit has one for all of them. */
+  readonly criteria?: Criteria;
   /** Critical value of the profile's increase. */
   readonly cut: number;
   readonly stop: StopReason;

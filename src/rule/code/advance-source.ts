@@ -4,26 +4,26 @@ import { type EmittedProgram, emitProgram } from "./emit-program.js";
 import { lines, readArguments } from "./source-parts.js";
 
 const sharedByPaths: ReadonlySet<LeafRole> = new Set(["parameter", "input", "period"]);
-const ofTheirOwn: ReadonlySet<LeafRole> = new Set(["input", "period"]);
+const fixedPerPath: ReadonlySet<LeafRole> = new Set(["input", "period"]);
 
-/** Paths that a loop over a rule of one value takes at once: their steps overlap in the processor. */
-const abreast = 8;
+/** Paths stepped in one turn of the unrolled loop: their steps overlap in the processor. */
+const unrollFactor = 8;
 
-/** The lines that step the path whose state vector begins at a place, between those that read and write it. */
+/** Source that steps the path whose state vector starts at `place`. */
 function stepLines(rule: RuleGraph, program: EmittedProgram, place: string): readonly string[] {
   return [
     lines(rule.states, (i) => `const s${i} = present[${place} + ${i}];`),
-    ...program.inside,
+    ...program.body,
     lines(rule.states, (i) => `const n${i} = ${program.read(rule.next[i]!)};`),
     lines(rule.states, (i) => `present[${place} + ${i}] = n${i};`),
   ];
 }
 
-/** A loop over most paths of a rule of one value. */
-function abreastLoop(rule: RuleGraph, program: EmittedProgram): readonly string[] {
+/** Unrolled loop for a rule of one state. */
+function unrolledLoop(rule: RuleGraph, program: EmittedProgram): readonly string[] {
   return [
-    `for (; path + ${abreast} <= last; path += ${abreast}) {`,
-    ...Array.from({ length: abreast }, (_, k) => [
+    `for (; path + ${unrollFactor} <= last; path += ${unrollFactor}) {`,
+    ...Array.from({ length: unrollFactor }, (_, k) => [
       "{",
       ...stepLines(rule, program, `path + ${k}`),
       "}",
@@ -38,13 +38,13 @@ const ownParameters = (count: number): string =>
 
 /** Body of `advance(present, first, last, parameters, inputs, t)`: whatever paths share stands before the loops. */
 export function advanceSource(rule: RuleGraph, shared: boolean): string {
-  const program = emitProgram(rule.next, shared ? sharedByPaths : ofTheirOwn);
+  const program = emitProgram(rule.next, shared ? sharedByPaths : fixedPerPath);
   const { states, parameters } = rule;
   return [
     shared ? readArguments(rule) : readArguments({ ...rule, parameters: 0 }),
-    ...program.before,
+    ...program.preamble,
     "let path = first;",
-    ...(shared && states === 1 ? abreastLoop(rule, program) : []),
+    ...(shared && states === 1 ? unrolledLoop(rule, program) : []),
     `for (let at = path * ${states}; path < last; path++, at += ${states}) {`,
     shared ? "" : ownParameters(parameters),
     ...stepLines(rule, program, "at"),
@@ -54,15 +54,15 @@ export function advanceSource(rule: RuleGraph, shared: boolean): string {
 
 /** Body of `quantities(present, first, last, parameters, stride, inputs, t, out)`. */
 export function quantitiesSource(rule: RuleGraph): string {
-  const program = emitProgram(rule.quantities, ofTheirOwn);
+  const program = emitProgram(rule.quantities, fixedPerPath);
   const { states, parameters } = rule;
   return [
     readArguments({ ...rule, parameters: 0 }),
-    ...program.before,
+    ...program.preamble,
     `for (let path = first, at = first * ${states}; path < last; path++, at += ${states}) {`,
     lines(parameters, (i) => `const c${i} = parameters[path * stride + ${i}];`),
     lines(states, (i) => `const s${i} = present[at + ${i}];`),
-    ...program.inside,
+    ...program.body,
     lines(rule.quantities.length, (i) => `out[${i}][path] = ${program.read(rule.quantities[i]!)};`),
     "}",
   ].join("\n");
