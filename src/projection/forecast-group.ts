@@ -216,6 +216,8 @@ function runBoth(
     reading: reading.map((noise) => noise && noiseDraw(noise)),
     factors: starts.factors,
     spread: starts.spread,
+    // Those that a decision meets, which draws its starts once and runs many settings from there.
+    streams: streams.map((each) => each.jump()),
     onRow: future.onRow,
     onProgress: half(1),
   });
