@@ -1,9 +1,9 @@
-import { type RandomStream, randomStream } from "../numeric/index.js";
+import { type RandomStream, type RunHooks, randomStream, type Tick, ticker } from "../numeric/index.js";
 import type { Observations, ObservedGroup } from "../record/index.js";
 import { refuseNoDensity } from "./refusals.js";
 
 /** Options of `densityDependence`. */
-export interface DensityOptions {
+export interface DensityOptions extends RunHooks {
   /** Default: the only state. */
   readonly state?: string;
   /** Records drawn without density dependence; default 1999. */
@@ -57,11 +57,12 @@ export function densityDependence(
 ): DensityDependence {
   const { resamples = 1999, seed = 1, level = 0.95 } = options;
   const state = options.state ?? observations.states[0]!.name;
+  const tick = ticker(options, observations.groups.length * resamples);
   let stream = randomStream(seed);
   const groups = observations.groups.map((group) => {
     const own = stream;
     stream = stream.jump();
-    return groupDensity(group, state, resamples, level, own);
+    return groupDensity(group, state, { resamples, level, tick }, own);
   });
   const sentence = groups.map((group) => group.sentence).join(" ");
   return Object.freeze({
@@ -76,8 +77,7 @@ export function densityDependence(
 function groupDensity(
   group: ObservedGroup,
   state: string,
-  resamples: number,
-  level: number,
+  { resamples, level, tick }: { readonly resamples: number; readonly level: number; readonly tick: Tick },
   stream: RandomStream,
 ): GroupDensity {
   const values = group.values[state];
@@ -88,6 +88,7 @@ function groupDensity(
   let below = 1;
   const drawn = new Float64Array(logs.length);
   for (let k = 0; k < resamples; k++) {
+    tick();
     walk(logs[0]!, line.growth, line.deviation, group.index, stream, drawn);
     if ((lineOf(drawn, group.index)?.statistic ?? 0) <= line.statistic) below++;
   }

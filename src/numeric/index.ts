@@ -25,6 +25,7 @@ export {
 export { logGamma } from "./probability/log-gamma.js";
 export { quantile } from "./probability/quantile.js";
 export { type RandomStream, randomStream } from "./probability/random-stream.js";
+export { type RunHooks, reporter, type Tick, ticker } from "./run-hooks.js";
 export { findRoot, type RootOptions } from "./search/find-root.js";
 export { type LowestValue, minimise } from "./search/minimise.js";
 export { secondDerivatives } from "./search/second-derivatives.js";

@@ -1,5 +1,5 @@
 import type { Fit, GroupFit } from "../estimate/index.js";
-import type { RandomStream } from "../numeric/index.js";
+import { type RandomStream, reporter } from "../numeric/index.js";
 import { readsPeriod } from "../rule/index.js";
 import { type CentralPath, centralPath, stateLimits } from "./central-path.js";
 import { keepLimit } from "./check-run.js";
@@ -124,7 +124,8 @@ function runBoth(
     });
   const mean = gathered("mean path");
   const future = gathered("future observation");
-  const half = (part: number) => (done: number, of: number) => options.onProgress?.(part * of + done, 2 * of);
+  const report = reporter(options);
+  const half = (part: number) => (done: number, of: number) => report(part * of + done, 2 * of);
   const run: Omit<EnsembleRun, "change" | "reading" | "onRow"> = {
     compiled: ground.compiled,
     states: rule.states.length,

@@ -1,9 +1,10 @@
+import type { RunHooks } from "../numeric/index.js";
 import type { Watch } from "./ensemble/passage.js";
 import type { InputPlans } from "./inputs/input-plan.js";
 import type { Scenarios } from "./inputs/scenarios.js";
 
 /** Options of `forecast`. */
-export interface ForecastOptions {
+export interface ForecastOptions extends RunHooks {
   /** Whole periods beyond the last recorded one. */
   readonly periods: number;
   /** By input, the first period ahead first; needed for every input of the rule. */
@@ -18,8 +19,6 @@ export interface ForecastOptions {
   readonly seed?: number;
   /** Values whose first passage is followed, for more paths than can be kept. */
   readonly watch?: readonly Watch[];
-  /** Called now and then with what is done; what it throws ends the run. */
-  readonly onProgress?: (done: number, of: number) => void;
 }
 
 /** The options that every forecast has settled. */

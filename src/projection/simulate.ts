@@ -1,5 +1,5 @@
 import { type InitialValues, initialVector, parametersBySlot } from "../dynamics/index.js";
-import { randomStream } from "../numeric/index.js";
+import { type RunHooks, randomStream, reporter } from "../numeric/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../rule/index.js";
 import { centralPath, type Ground, stateLimits } from "./central-path.js";
 import { checkRun, keepLimit } from "./check-run.js";
@@ -18,7 +18,7 @@ import type { GroupForecast } from "./projected-group.js";
 import { rangeWarnings } from "./range-warnings.js";
 
 /** Options of `simulate`. */
-export interface SimulateOptions {
+export interface SimulateOptions extends RunHooks {
   /** By parameter; those the rule holds fixed may be left out. */
   readonly parameters?: Readonly<Record<string, number>>;
   /** By state; those the rule states may be left out. With lags a list, oldest first. */
@@ -44,8 +44,6 @@ export interface SimulateOptions {
   readonly seed?: number;
   /** Values whose first passage is followed, for more paths than can be kept. */
   readonly watch?: readonly Watch[];
-  /** Called now and then with what is done; what it throws ends the run. */
-  readonly onProgress?: (done: number, of: number) => void;
 }
 
 /** Paths of a rule at given parameters, with bands across them. */
@@ -141,7 +139,7 @@ function simulated(
     limits: stateLimits(rule),
     streams: blockStreams(randomStream(options.seed), paths),
     onRow: found.onRow,
-    ...(options.onProgress && { onProgress: options.onProgress }),
+    onProgress: reporter(options),
   });
   const states = found.states();
   const index = Array.from({ length: periods + 1 }, (_, t) => t);

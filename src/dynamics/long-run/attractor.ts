@@ -1,9 +1,10 @@
+import { type RunHooks, ticker } from "../../numeric/index.js";
 import { compileRule, type Rule, readsPeriod } from "../../rule/index.js";
 import { changesWithTime, strangeName, unreadableOption } from "../refusals.js";
 import { type HeldSetting, holdStep } from "../setting/held-step.js";
 import { initialVector } from "../setting/setting.js";
 
-export interface AttractorOptions extends Omit<HeldSetting, "inputs"> {
+export interface AttractorOptions extends Omit<HeldSetting, "inputs">, RunHooks {
   /** The parameter that is varied. */
   readonly vary: string;
   /** Values of the parameter: a list, or two ends with how many. */
@@ -75,7 +76,9 @@ export function attractor(rule: Rule, options: AttractorOptions): Attractor {
   const values = new Float64Array(columns * perColumn);
   const table = new Float64Array((discard + points) * width);
   const firsts = starts.map((start) => initialVector(rule, everywhere(rule, start)));
+  const tick = ticker(options, columns);
   for (let column = 0; column < columns; column++) {
+    tick();
     parameters[slot] = at[column]!;
     firsts.forEach((first, k) => {
       path(first, parameters, [], 0, discard + points - 1, table);

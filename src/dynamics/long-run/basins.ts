@@ -1,10 +1,10 @@
-import { normalCdf } from "../../numeric/index.js";
+import { normalCdf, type RunHooks, ticker } from "../../numeric/index.js";
 import type { Interval, Rule } from "../../rule/index.js";
 import { orbit } from "../cycle/cycle-points.js";
 import { oneStateOnly, unreadableOption } from "../refusals.js";
 import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.js";
 
-export interface BasinsOptions extends HeldSetting {
+export interface BasinsOptions extends HeldSetting, RunHooks {
   /** First values to look at. */
   readonly range: Interval;
   /** Starts tried before borders are narrowed down; default 400. */
@@ -93,7 +93,9 @@ export function basins(rule: Rule, options: BasinsOptions): Basins {
   const held = holdStep(rule, options, "basin");
   const scale = Math.max(Math.abs(within[0]), Math.abs(within[1]));
   const found: { readonly attractor: readonly number[]; readonly from: Interval[] }[] = [];
+  const tick = ticker(options, starts);
   const kindOf = (x: number): number => {
+    tick();
     const attractor = destination(held, x, periods);
     const known = found.findIndex((basin) => same(basin.attractor, attractor, scale));
     return known >= 0 ? known : found.push({ attractor, from: [] }) - 1;

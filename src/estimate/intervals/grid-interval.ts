@@ -1,8 +1,11 @@
 import {
   type MinimiseOptions,
   minimiseSquares,
+  type RunHooks,
   randomStream,
   squaresWorkspace,
+  type Tick,
+  ticker,
 } from "../../numeric/index.js";
 import type { Fit } from "../fit.js";
 import { refuseFewDraws, refuseUnknownName } from "../refusals.js";
@@ -14,7 +17,7 @@ import type { Unknowns } from "../unknowns/unknowns.js";
 import type { Interval } from "./interval.js";
 
 /** Options of `gridInterval`. */
-export interface GridIntervalOptions {
+export interface GridIntervalOptions extends RunHooks {
   /** Group of the fit; default its first. */
   readonly group?: string;
   /** Simulated records at every value tried; default 399. */
@@ -50,7 +53,8 @@ export function gridInterval(fit: Fit, name: string, options: GridIntervalOption
       fitted.estimates.map((each) => each.name),
       "estimated parameter",
     );
-  const ordinary = ordinaryAt(refitProblem(fit, fitted), fitted, i, draws, seed);
+  const tick = ticker(options, 2 * (halvings + 2) * draws);
+  const ordinary = ordinaryAt(refitProblem(fit, fitted), fitted, i, { draws, seed, tick });
   const tail = (1 - level) / 2;
   const reach = reachOf(fitted, i);
   const lower = limit(fitted.estimates[i]!.value, -reach, (value) => 1 - ordinary(value) >= tail);
@@ -63,8 +67,7 @@ function ordinaryAt(
   problem: RefitProblem,
   fitted: GroupFit,
   i: number,
-  draws: number,
-  seed: number,
+  { draws, seed, tick }: { readonly draws: number; readonly seed: number; readonly tick: Tick },
 ): (value: number) => number {
   const { rule, group, unknowns, rows, system, at } = problem;
   const make = recordMaker(rule, group, unknowns, rows, problem.options);
@@ -88,6 +91,7 @@ function ordinaryAt(
     for (let k = 0; k < draws; k++) {
       rows.take(make(held.estimates, draw(stream)));
       if (signedRoot(held.estimates, value) <= own) below++;
+      tick();
     }
     return below / draws;
   };

@@ -1,4 +1,11 @@
-import { quantile, type RandomStream, randomStream } from "../../numeric/index.js";
+import {
+  quantile,
+  type RandomStream,
+  type RunHooks,
+  randomStream,
+  type Tick,
+  ticker,
+} from "../../numeric/index.js";
 import type { Fit } from "../fit.js";
 import type { Interval } from "../intervals/interval.js";
 import { refuseFewDraws } from "../refusals.js";
@@ -6,7 +13,7 @@ import type { GroupFit } from "../result/group-fit.js";
 import { type ResampledErrors, type Resampler, resampler } from "./resampler.js";
 
 /** Options of `bootstrap`. */
-export interface BootstrapOptions {
+export interface BootstrapOptions extends RunHooks {
   /** Normal errors (`parametric`, default), the fit's own residuals one by one, or in runs of neighbours (`block`). */
   readonly errors?: ResampledErrors;
   /** Length of a run; default the cube root of the number of values, rounded up. */
@@ -17,8 +24,6 @@ export interface BootstrapOptions {
   readonly seed?: number;
   /** Default that of the fit. */
   readonly level?: number;
-  /** Told after every hundredth refit; a false answer stops the work, and what was drawn so far is used. */
-  readonly onProgress?: (done: number, of: number) => unknown;
 }
 
 /** How the estimates of one unknown scattered over the refits. */
@@ -56,12 +61,13 @@ export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
   const { errors = "parametric", resamples = 999, seed = 1 } = options;
   if (!(Number.isInteger(resamples) && resamples >= 20)) throw refuseFewDraws(resamples);
   let stream = randomStream(seed);
+  const tick = ticker(options, fit.groups.length * resamples);
   let used = 0;
   const rows = fit.groups.flatMap((fitted) => {
     const own = stream;
     stream = stream.jump();
     const again = resampler(fit, fitted, errors, options.block);
-    const refits = refitsOf(again, fitted.estimates.length, { ...options, resamples }, own);
+    const refits = refitsOf(again, fitted.estimates.length, resamples, tick, own);
     used += refits.length;
     return rowsOf(fitted, refits, options.level ?? fit.options.level ?? 0.95);
   });
@@ -73,13 +79,14 @@ export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
 function refitsOf(
   { refit, reported }: Resampler,
   size: number,
-  { resamples, onProgress }: BootstrapOptions & { resamples: number },
+  resamples: number,
+  tick: Tick,
   stream: RandomStream,
 ): readonly Float64Array[] {
   const found: Float64Array[] = [];
   for (let k = 0; k < resamples; k++) {
-    if (k % 100 === 0 && onProgress?.(k, resamples) === false) break;
     const { estimates, stop } = refit(stream);
+    tick();
     if (stop.kind === "converged")
       found.push(Float64Array.from({ length: size }, (_, i) => reported(i, estimates[i]!)));
   }

@@ -1,12 +1,12 @@
 import { type Fit, type FitOptions, fit as fitRule } from "../../estimate/index.js";
-import { randomStream } from "../../numeric/index.js";
+import { type RunHooks, randomStream, ticker } from "../../numeric/index.js";
 import type { Observations } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
 import { refuseExact } from "../refit/refuse-exact.js";
 import { type GroupChangePoint, groupChangePoint } from "./group-change-point.js";
 
 /** Options of `changePoint`; those of a fit but for the kind of error, which is the process. */
-export interface ChangePointOptions extends Omit<FitOptions, "errors" | "intervals"> {
+export interface ChangePointOptions extends Omit<FitOptions, "errors" | "intervals">, RunHooks {
   /** Least share of the record on either side of a break; default 0.15. */
   readonly leastShare?: number;
   /** Records without a break that the largest F is held against; default 399, with which 5% is met exactly. */
@@ -47,15 +47,16 @@ export function changePoint(
   observations: Observations,
   options: ChangePointOptions = {},
 ): ChangePoint {
-  const { leastShare = 0.15, resamples = 399, seed = 1, ...others } = options;
+  const { leastShare = 0.15, resamples = 399, seed = 1, onProgress, signal, ...others } = options;
   const level = options.level ?? 0.95;
   const fit = fitRule(rule, observations, { ...others, errors: "process", intervals: "none" });
   refuseExact(fit);
+  const tick = ticker(options, fit.groups.length * resamples);
   let stream = randomStream(seed);
   const groups = fit.groups.map((group) => {
     const own = stream;
     stream = stream.jump();
-    return groupChangePoint(fit, group, { leastShare, draws: resamples, level }, own);
+    return groupChangePoint(fit, group, { leastShare, draws: resamples, level, tick }, own);
   });
   const sentence = groups.map((group) => group.sentence).join(" ");
   return Object.freeze({

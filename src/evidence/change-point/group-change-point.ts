@@ -1,5 +1,5 @@
 import type { Fit, GroupFit } from "../../estimate/index.js";
-import type { RandomStream } from "../../numeric/index.js";
+import type { RandomStream, Tick } from "../../numeric/index.js";
 import { type Refitter, refitter } from "../refit/refitter.js";
 import { refuseNoDates } from "../refusals.js";
 import { type BreakDate, breakScan } from "./break-scan.js";
@@ -39,6 +39,7 @@ export interface BreakSearch {
   readonly leastShare: number;
   readonly draws: number;
   readonly level: number;
+  readonly tick: Tick;
 }
 
 /** Looks for a break in one group. */
@@ -55,7 +56,7 @@ export function groupChangePoint(
   const scan = breakScan(again, dates);
   const best = scan.reduce((low, next) => (next.sumOfSquares < low.sumOfSquares ? next : low));
   const statistic = fRatio(group.sumOfSquares, best.sumOfSquares, count, size);
-  const probability = chanceOf(statistic, supremumDraw(fit, group, again, dates), search.draws, stream);
+  const probability = chanceOf(statistic, supremumDraw(fit, group, again, dates), search, stream);
   const found = {
     group: group.group,
     statistic,
@@ -100,11 +101,17 @@ function datedBy(
 }
 
 /** Share of drawn records without a break whose largest F reaches the statistic, the record itself counted in. */
-function chanceOf(statistic: number, draw: SupremumDraw, draws: number, stream: RandomStream): number {
+function chanceOf(
+  statistic: number,
+  draw: SupremumDraw,
+  { draws, tick }: BreakSearch,
+  stream: RandomStream,
+): number {
   let above = 1;
   let drawn = 1;
   for (let k = 0; k < draws; k++) {
     const largest = draw(stream);
+    tick();
     if (largest === undefined) continue;
     drawn++;
     if (largest >= statistic) above++;

@@ -1,5 +1,5 @@
 import { type Fit, fit as fitRule, type GroupFit } from "../../estimate/index.js";
-import { ModelError, type RandomStream } from "../../numeric/index.js";
+import { ModelError, type RandomStream, type Tick } from "../../numeric/index.js";
 import { recordDrawer } from "../refit/record-drawer.js";
 import { type Refitter, refitter } from "../refit/refitter.js";
 import { autocorrelations } from "../statistics/autocorrelation.js";
@@ -44,6 +44,7 @@ export function errorAdvice(
   group: GroupFit,
   draws: number,
   stream: RandomStream,
+  tick: Tick,
 ): ErrorAdvice | undefined {
   const process = sideOf(fit, group, "process");
   const observation = sideOf(fit, group, "observation");
@@ -51,8 +52,8 @@ export function errorAdvice(
   const measure = differenceOf(process, observation);
   const difference = measure(process.again.recorded);
   const expected = {
-    process: expectedOf(process, measure, draws, stream),
-    observation: expectedOf(observation, measure, draws, stream),
+    process: expectedOf(process, measure, draws, stream, tick),
+    observation: expectedOf(observation, measure, draws, stream, tick),
   };
   const weight =
     1 /
@@ -119,6 +120,7 @@ function expectedOf(
   measure: (values: Float64Array) => number,
   draws: number,
   stream: RandomStream,
+  tick: Tick,
 ): { readonly mean: number; readonly deviation: number } {
   const draw = recordDrawer(fit, again, group.sigma);
   const values = new Float64Array(again.recorded.length);
@@ -126,6 +128,7 @@ function expectedOf(
   for (let tries = 0; found.length < draws && tries < 2 * draws; tries++) {
     const difference = draw(stream, values) ? measure(values) : Number.NaN;
     if (Number.isFinite(difference)) found.push(difference);
+    tick();
   }
   const mean = found.reduce((sum, value) => sum + value, 0) / found.length;
   const squares = found.reduce((sum, value) => sum + (value - mean) ** 2, 0);

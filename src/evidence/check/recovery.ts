@@ -1,5 +1,5 @@
 import { type Fit, type GroupFit, resampler } from "../../estimate/index.js";
-import { quantile, type RandomStream } from "../../numeric/index.js";
+import { quantile, type RandomStream, type Tick } from "../../numeric/index.js";
 import { recordDrawer } from "../refit/record-drawer.js";
 import { refitter } from "../refit/refitter.js";
 
@@ -48,6 +48,7 @@ export function recovery(
   group: GroupFit,
   wanted: number,
   stream: RandomStream,
+  tick: Tick,
 ): Recovery | undefined {
   const attempt = squaresAttempt(fit, group) ?? likelihoodAttempt(fit, group);
   if (attempt === undefined) return undefined;
@@ -55,6 +56,7 @@ export function recovery(
   let failed = 0;
   while (found.length < wanted && failed < wanted) {
     const refit = attempt(stream);
+    tick();
     if (refit === undefined) failed++;
     else found.push(refit);
   }

@@ -1,4 +1,5 @@
 import type { Fit } from "../../estimate/index.js";
+import { type RunHooks, ticker } from "../../numeric/index.js";
 import { type RollingOrigin, rollingOrigin } from "../forecasts/rolling-origin.js";
 import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseOneFit, refuseUnlikeErrors, refuseUnlikeRecords, refuseUnlikeStarts } from "../refusals.js";
@@ -7,7 +8,7 @@ import { type ComparisonVerdict, comparisonVerdict } from "./comparison-verdict.
 import { type LikelihoodRatio, likelihoodRatios } from "./likelihood-ratio.js";
 
 /** Options of `compare`. */
-export interface CompareOptions {
+export interface CompareOptions extends RunHooks {
   /** Rows from which each rival is fitted afresh and carried forward; default a third of the record, 12 at most. */
   readonly origins?: number;
   /** Periods forecast from each; default a tenth of the record. */
@@ -77,7 +78,7 @@ export function compare(fits: readonly Fit[], options: CompareOptions = {}): Com
 
 function planOf(
   fit: Fit,
-  { origins, periods: horizon, level = 0.8 }: CompareOptions,
+  { origins, periods: horizon, level = 0.8, ...hooks }: CompareOptions,
 ): Parameters<typeof rollingOrigin>[1] {
   const rows = Math.min(...fit.observations.groups.map((group) => group.index.length));
   const count = origins ?? Math.min(12, Math.round(rows / 3));
@@ -85,6 +86,7 @@ function planOf(
     leftOut: Array.from({ length: count }, (_, i) => count - i),
     horizon: horizon ?? Math.max(1, Math.round(rows / 10)),
     level,
+    tick: ticker(hooks, fit.groups.length * count),
   };
 }
 

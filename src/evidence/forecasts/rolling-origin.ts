@@ -1,4 +1,5 @@
 import type { Fit } from "../../estimate/index.js";
+import type { Tick } from "../../numeric/index.js";
 import type { ObservedGroup } from "../../record/index.js";
 import { type ForecastScores, type Scored, scoresOf } from "./forecast-scores.js";
 import { type NaiveForecast, naiveForecasts } from "./naive-forecasts.js";
@@ -26,6 +27,8 @@ export interface OriginPlan {
   readonly fitOnce?: boolean;
   readonly horizon: number;
   readonly level: number;
+  /** Called after each origin of each group. */
+  readonly tick?: Tick;
 }
 
 interface Target {
@@ -55,6 +58,7 @@ export function rollingOrigin(fits: readonly Fit[], plan: OriginPlan): RollingOr
       .map((origin) => {
         if (trained === undefined || !plan.fitOnce)
           trained = fits.map((fit) => fitUntil(fit, group.name, origin));
+        plan.tick?.();
         return forecastsAt(fits, trained, naive, group, origin, plan.horizon);
       })
       .filter((forecasts) => forecasts.length > 0);

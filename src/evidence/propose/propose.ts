@@ -1,10 +1,11 @@
 import type { Fit, FitOptions } from "../../estimate/index.js";
 import { fit as fitRule } from "../../estimate/index.js";
+import { type RunHooks, type Tick, ticker } from "../../numeric/index.js";
 import type { Observations } from "../../record/index.js";
 import type { ErrorAdvice } from "../check/error-advice.js";
 import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseNothingFits } from "../refusals.js";
-import { adviceOn } from "./advice-on.js";
+import { adviceDraws, adviceOn } from "./advice-on.js";
 import { candidatesFor, type NotTried } from "./candidates.js";
 import { catchInput, catchSymbol } from "./catch-input.js";
 import { holdOut } from "./hold-out.js";
@@ -14,7 +15,7 @@ import { type Standing, supportedRules } from "./supported-rules.js";
 import { type Tried, tryRules } from "./try-rules.js";
 
 /** Options of `propose`; others are those of a fit. */
-export interface ProposeOptions extends Omit<FitOptions, "errors" | "intervals"> {
+export interface ProposeOptions extends Omit<FitOptions, "errors" | "intervals">, RunHooks {
   /** Default: the only state. */
   readonly state?: string;
   /** Where the error lies; without it both are tried, and the record says which, or that it cannot. */
@@ -75,17 +76,16 @@ export interface Proposal {
  * @example propose(counts, { distribution: "lognormal" }).verdict.kind; // "undecided"
  */
 export function propose(observations: Observations, options: ProposeOptions = {}): Proposal {
-  const { state, errors, seed = 1, ...others } = options;
+  const { state, errors, seed = 1, onProgress, signal, ...others } = options;
   const { record, takenFrom } = catchInput(oneState(observations, state));
   const positive = record.groups.every((group) =>
     Object.values(group.values)[0]!.every((value) => value > 0),
   );
-  const distribution = others.distribution ?? (positive ? "lognormal" : "normal");
   const { candidates, left } = candidatesFor(record.inputs);
   const usable = candidates.filter((candidate) => positive || candidate.anyLevel);
   const kinds = errors === undefined ? (["process", "observation"] as const) : [errors];
-  const settings = { ...others, distribution };
-  const { tried, failed } = tryRules(usable, record, kinds, settings);
+  const tick = ticker(options, usable.length * kinds.length + (errors === undefined ? 4 * adviceDraws : 0));
+  const { tried, failed } = tryRules(usable, record, kinds, others, tick);
   if (tried.length === 0) throw refuseNothingFits(failed[0]?.reason ?? "no rule suits its levels");
   for (const { fit } of tried) refuseExact(fit);
   const barred = candidates.filter((candidate) => !usable.includes(candidate));
@@ -94,7 +94,7 @@ export function propose(observations: Observations, options: ProposeOptions = {}
     ...failed,
     ...left,
   ];
-  return judged({ record, takenFrom, settings, tried, seed, errors, notTried });
+  return judged({ record, takenFrom, settings: others, tried, seed, errors, notTried, tick });
 }
 
 interface Trial {
@@ -105,10 +105,11 @@ interface Trial {
   readonly notTried: readonly NotTried[];
   readonly errors: ProposeOptions["errors"];
   readonly seed: number;
+  readonly tick: Tick;
 }
 
-function judged({ record, takenFrom, settings, tried, notTried, errors, seed }: Trial): Proposal {
-  const advice = errors === undefined ? adviceOn(tried, seed) : undefined;
+function judged({ record, takenFrom, settings, tried, notTried, errors, seed, tick }: Trial): Proposal {
+  const advice = errors === undefined ? adviceOn(tried, seed, tick) : undefined;
   const chosen = errors ?? advice?.kind ?? "undecided";
   const kinds = chosen === "undecided" ? (["process", "observation"] as const) : [chosen];
   const standings = kinds.flatMap((kind) => supportedRules(tried.filter((each) => each.errors === kind)));
@@ -132,7 +133,13 @@ function judged({ record, takenFrom, settings, tried, notTried, errors, seed }: 
   const unread = record.inputs
     .filter((input) => !told.some(({ fit }) => fit.rule.inputs.includes(input)))
     .map((input) => (input === catchSymbol ? (takenFrom ?? input) : input));
-  const words = proposalWords(result, { tried: tried.length, heldOut: held?.values, takenFrom, unread });
+  const words = proposalWords(result, {
+    tried: tried.length,
+    heldOut: held?.values,
+    takenFrom,
+    unread,
+    assumedNormal: settings.distribution === undefined,
+  });
   return Object.freeze({ kind: "proposal", ...result, ...words });
 }
 
