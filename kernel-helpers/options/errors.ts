@@ -1,0 +1,170 @@
+import { ModelError } from "../../src/numeric/index.js";
+import { type ArgumentKind, adviceFor, argumentWords } from "./argument.js";
+import { faultOf } from "./check-value.js";
+import type { Fault, Path } from "./fault.js";
+import type { FunctionSchema } from "./function-schema.js";
+import type { Described, Fields } from "./option.js";
+import { meant, nearestChoice } from "./other-words.js";
+import { anyOf, inCode, mustBe } from "./words-of-kind.js";
+import { code, given, isPlain, typed } from "./written.js";
+
+type Given = Readonly<Record<string, unknown>>;
+
+/** The error of one fault, which names the option as it was typed and what to type instead. */
+export function optionError(fault: Fault, { name }: FunctionSchema, options: Given): ModelError {
+  switch (fault.kind) {
+    case "wrong":
+      return wrongError(fault, options);
+    case "unknown":
+      return unknownError(fault, name, options);
+    case "missing":
+      return missingError(fault, name, options);
+    case "both":
+      return new ModelError(
+        "option-conflict",
+        `${anyOf(fault.names.map(inCode), "and")}${inside(fault.path)} were both given. Give one of them.`,
+        { options: fault.names },
+      );
+  }
+}
+
+function wrongError({ path, must, value, instead }: Extract<Fault, { kind: "wrong" }>, options: Given): ModelError {
+  return new ModelError(
+    "option-wrong",
+    `Option ${inCode(placeOf(path))} must be ${must}; ${given(value)} was given.${write(options, path, instead)}`,
+    { option: placeOf(path), value },
+  );
+}
+
+function unknownError(
+  { path, name, value, known }: Extract<Fault, { kind: "unknown" }>,
+  called: string,
+  options: Given,
+): ModelError {
+  const names = Object.keys(known);
+  const near = meant(name, names);
+  const hint = near.length === 0 ? "" : ` Did you mean ${anyOf(near.map(inCode))}?`;
+  const renamed = near.length === 0 ? "" : writeRenamed(options, path, name, near[0]!, known);
+  const what = path.length === 0 ? `option ${inCode(name)}` : `field ${inCode(name)}${inside(path)}`;
+  const taker = path.length === 0 ? inCode(called) : inCode(placeOf(path));
+  return new ModelError(
+    "option-unknown",
+    `Unknown ${what}.${hint}${renamed} ${taker} takes ${anyOf(names.map(inCode), "and")}.`,
+    { option: [...path, name].join("."), value, known: names, nearest: near },
+  );
+}
+
+function missingError(
+  { path, fields }: Extract<Fault, { kind: "missing" }>,
+  called: string,
+  options: Given,
+): ModelError {
+  const names = Object.keys(fields);
+  const name = names[0]!;
+  const field = fields[name]!;
+  const which = names.length === 1 ? `the option ${inCode(name)}` : `one of the options ${anyOf(names.map(inCode))}`;
+  const needs = path.length === 0 ? `${inCode(called)} needs ${which}` : `Option ${inCode(placeOf(path))} lacks ${anyOf(names.map(inCode))}`;
+  const must = names.length === 1 ? `, ${mustBe(field.kind)}` : "";
+  return new ModelError(
+    "option-missing",
+    `${needs}${must}.${write(options, [...path, name], code(field.example))}`,
+    { options: names },
+  );
+}
+
+/** @param place - 0 for the first argument. */
+export function argumentError(
+  schema: FunctionSchema,
+  place: number,
+  wanted: readonly ArgumentKind[],
+  value: unknown,
+): ModelError {
+  const which = schema.takes.length > 1 ? ` as its ${ordinals[place]} argument` : "";
+  return new ModelError(
+    "argument-wrong",
+    `${inCode(schema.name)} needs ${anyOf(wanted.map((kind) => argumentWords[kind]))}${which}; ${given(value)} was given. ${adviceFor(wanted, value)}: ${inCode(schema.example)}.`,
+    { argument: schema.takes[place]?.name, place: place + 1 },
+  );
+}
+
+const ordinals = ["first", "second", "third", "fourth"];
+
+export function plainArgumentError(schema: FunctionSchema, name: string, wanted: Described, value: unknown): ModelError {
+  return new ModelError(
+    "argument-wrong",
+    `The ${inCode(name)} of ${inCode(schema.name)} must be ${mustBe(wanted.kind)}; ${given(value)} was given. Write ${inCode(schema.example)}.`,
+    { argument: name, value },
+  );
+}
+
+/** @param value - what stands where the options belong. */
+export function noOptionsError(schema: FunctionSchema, value: unknown): ModelError {
+  return new ModelError(
+    "argument-wrong",
+    `The options of ${inCode(schema.name)} are an object; ${given(value)} was given. Write ${inCode(schema.example)}.`,
+    { value },
+  );
+}
+
+export function tooManyArgumentsError(schema: FunctionSchema, value: unknown): ModelError {
+  const options = schema.options === undefined ? "no options" : "its options as the last argument";
+  return new ModelError(
+    "argument-wrong",
+    `${inCode(schema.name)} takes ${options}; ${given(value)} was given as well. Write ${inCode(schema.example)}.`,
+    { value },
+  );
+}
+
+const gigabyte = 1e9;
+
+/** @param most - largest value that fits. */
+export function tooLargeError(option: string, value: number, bytes: number, most: number): ModelError {
+  const size = bytes >= 1000 * gigabyte ? `${Math.round(bytes / gigabyte / 1000)} TB` : `${Math.round(bytes / gigabyte)} GB`;
+  return new ModelError(
+    "option-too-large",
+    `Option ${inCode(option)} is too large: ${value} would need about ${size} of memory, and a call may use 1 GB. Write ${inCode(`${option}: ${most}`)} or less.`,
+    { option, value, bytes, most },
+  );
+}
+
+const inside = (path: Path): string => (path.length === 0 ? "" : ` in option ${inCode(placeOf(path))}`);
+
+/** "noise.N.sd", "levels[1]". */
+function placeOf(path: Path): string {
+  return path.reduce<string>(
+    (place, step) => (typeof step === "number" ? `${place}[${step}]` : place === "" ? step : `${place}.${step}`),
+    "",
+  );
+}
+
+/** The whole option with the wrong part put right, as it is typed. */
+function write(options: Given, path: Path, instead: unknown): string {
+  const [name] = path as [string];
+  const text = typed(withPart(options, path, instead)[name]);
+  return text === undefined ? "" : ` Write ${inCode(`${name}: ${text}`)}.`;
+}
+
+/** The same with a field under the name that was meant. */
+function writeRenamed(options: Given, path: Path, name: string, meantName: string, known: Fields): string {
+  const { [name]: value, ...others } = path.reduce<unknown>((own, step) => (own as Given)[step], options) as Given;
+  const own = translated(name, value, known[meantName]!);
+  return path.length === 0
+    ? write({}, [meantName], own)
+    : write(options, path, { ...others, [meantName]: own });
+}
+
+/** A value given under another word, as the option takes it. */
+function translated(word: string, value: unknown, field: Described): unknown {
+  const { kind, example } = field;
+  const share = /^(alpha|significance)$/i.test(word) && typeof value === "number" ? [1 - value] : [];
+  const choice = kind.is === "choice" ? nearestChoice(String(value), kind.of) : undefined;
+  const all = [...share, value, [value], choice];
+  return all.find((each) => each !== undefined && faultOf(field, each, []) === undefined) ?? code(example);
+}
+
+function withPart(whole: unknown, [step, ...rest]: Path, part: unknown): Given {
+  if (step === undefined) return part as Given;
+  const own = isPlain(whole) || Array.isArray(whole) ? (whole as Given) : {};
+  const changed = { ...own, [step]: withPart(own[step], rest, part) };
+  return Array.isArray(own) ? (Object.values(changed) as unknown as Given) : changed;
+}

@@ -1,0 +1,63 @@
+import type { Kind, Range } from "./option.js";
+
+/** "a, b or c". */
+export function anyOf(items: readonly string[], last = "or"): string {
+  if (items.length <= 1) return items[0] ?? "";
+  return `${items.slice(0, -1).join(", ")} ${last} ${items[items.length - 1]}`;
+}
+
+export const inCode = (name: string): string => `\`${name}\``;
+
+const quoted = (words: readonly string[]): readonly string[] => words.map((word) => JSON.stringify(word));
+
+/** What a value of a kind is, as after "must be". */
+export function mustBe(kind: Kind): string {
+  switch (kind.is) {
+    case "number":
+      return numberWords(kind);
+    case "text":
+      return kind.words ?? "a text";
+    case "bigint":
+      return "a bigint";
+    case "flag":
+      return "true or false";
+    case "function":
+      return "a function";
+    case "signal":
+      return "the signal of an AbortController";
+    case "anything":
+      return "a value";
+    case "choice":
+      return anyOf(quoted(kind.of));
+    case "list":
+      return listWords(kind);
+    case "named":
+      return `an object that holds, by name, ${mustBe(kind.of.kind)}`;
+    case "shape":
+      return `an object with ${anyOf(Object.keys(kind.fields).map(inCode), "and")}`;
+    case "variants":
+      return `an object with ${inCode(kind.by)}: ${anyOf(quoted(Object.keys(kind.of)))}`;
+    case "measures":
+      return `an object with one of ${anyOf(Object.keys(kind.of).map(inCode))}`;
+    case "either":
+      return anyOf(kind.of.map((each) => mustBe(each.kind)));
+    case "result":
+      return `a ${kind.of}`;
+  }
+}
+
+function listWords({ of, length, least = 0 }: Extract<Kind, { is: "list" }>): string {
+  const each = mustBe(of.kind);
+  if (length !== undefined) return `a list of ${length}, each ${each}`;
+  return `a list${least > 0 ? " with" : " of"} ${least > 0 ? `at least ${least}, each ` : ""}${each}`;
+}
+
+function numberWords({ from, above, to, below, whole, open }: Range): string {
+  const noun = whole === true ? "a whole number" : "a number";
+  if (above !== undefined && below !== undefined) return `between ${above} and ${below}`;
+  if (from !== undefined && to !== undefined) return `${noun} from ${from} to ${to}`;
+  if (from !== undefined) return `${noun}, at least ${from}`;
+  if (above !== undefined) return `${noun} above ${above}`;
+  if (to !== undefined) return `${noun}, at most ${to}`;
+  return whole === true ? noun : open === true ? "a number" : "a finite number";
+}
