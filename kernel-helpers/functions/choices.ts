@@ -35,7 +35,7 @@ export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum
  * What an answer hangs on: its change for one standard error and for ten per cent of each parameter, in two charts,
  * and the elasticities.
  *
- * @example sensitivity(fitted, { periods: 12, answer: { time: "N", value: 600, direction: "rising" } }).rows.length // 3
+ * @example sensitivity(fitted, { periods: 12, answer: { time: "N", risesTo: 600 } }).rows.length // 3
  */
 export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): Sensitivity {
   const found = sensitivityOf(subject, { seed: caseLog.seed(), ...options });
@@ -44,7 +44,7 @@ export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): S
 }
 
 /**
- * Time, level, cost and risk of several settings, side by side; the result shows a table and a curve for each answer.
+ * Time, level, cost and probability of several settings, side by side; the result shows a table and a curve for each answer.
  *
  * @example
  * const stock = recurrence("stock[t+1] = stock + ordered - 10");

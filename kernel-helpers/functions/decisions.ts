@@ -14,18 +14,18 @@ import type { Forecast, Simulation } from "../../src/projection/index.js";
 import type { Rule } from "../../src/rule/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
-import { showNextReading, showReach, showSolved } from "./show-decisions.js";
+import { levelWords, showNextReading, showReach, showSolved } from "./show-decisions.js";
 import { shownTogether } from "./shown-together.js";
 
 /**
  * When a projected state first reaches a value; the result shows time, margin, first recorded period, the
  * distribution over periods and the probability of never, and says it in a sentence.
  *
- * @example timeToReach(ahead, { state: "N", value: 120, direction: "rising" }).sentence;
+ * @example timeToReach(ahead, { state: "N", risesTo: 120 }).sentence;
  */
 export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOptions): TimeToReach {
   const found = reachesValue(ahead, options);
-  caseLog.noteStep(`asked when ${found.state} reaches ${found.value} ${found.unit}, ${found.direction}`);
+  caseLog.noteStep(`asked when ${found.state} ${levelWords(found)}`);
   return showing({ ...found }, () => shownTogether(showReach(found, ahead)));
 }
 

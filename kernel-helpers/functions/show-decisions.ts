@@ -5,7 +5,7 @@ import {
   type Solved,
   type TimeToReach,
 } from "../../src/decision/index.js";
-import type { Forecast, Simulation } from "../../src/projection/index.js";
+import { type Forecast, levelSide, type Simulation } from "../../src/projection/index.js";
 import { type Figure, figure } from "../figures/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
 import { ruleTitle } from "./rule-title.js";
@@ -19,17 +19,17 @@ export function showReach(found: TimeToReach, ahead: Forecast | Simulation): rea
   const name = `the level ${amountWords(found)}`;
   const fans =
     ahead.kind === "forecast"
-      ? [decidingFan(ahead, found.state, { value: found.value, name }, eventWords(found))]
+      ? [decidingFan(ahead, found.state, { value: levelSide(found).value, name }, eventWords(found))]
       : [];
   return [reachTable(found), ...fans, ...figures];
 }
 
 function reachTable(found: TimeToReach): Table {
-  const dated = found.groups.some((group) => !group.words.horizon.startsWith(found.periodUnit));
+  const dated = found.groups.some((group) => !group.words.lastPeriod.startsWith(found.periodUnit));
   const time = dated
     ? ({ kind: "text" } as const)
     : ({ kind: "number", digits: 5, unit: found.periodUnit, grouped: false } as const);
-  const random = found.groups.some((group) => group.draws > 1);
+  const random = found.groups.some((group) => group.paths > 1);
   const grouped: Column[] = found.groups.length > 1 ? [{ key: "who", label: "Group", kind: "text" }] : [];
   return table({
     title: `When ${found.state} reaches ${amountWords(found)}${ruleTitle(found.rule, "by")}`,
@@ -64,7 +64,7 @@ function eventWords(found: TimeToReach): string {
   const each = found.groups.map((group) => {
     const name = projectedName(group);
     const share = `${(100 * (1 - group.never)).toFixed(1)}% of draws (Monte-Carlo error ${(100 * group.neverError).toFixed(1)}%)`;
-    return `${name === "" ? "" : `${name}: `}there by ${group.words.horizon} in ${share}`;
+    return `${name === "" ? "" : `${name}: `}there by ${group.words.lastPeriod} in ${share}`;
   });
   const [first = "", ...rest] = each;
   return [first.charAt(0).toUpperCase() + first.slice(1), ...rest].join("; ");
@@ -87,8 +87,13 @@ function timesOf(group: GroupReach, dated: boolean): Readonly<Record<string, num
 }
 
 /** "120 ×10⁴ cells/mL", as the sentence has it. */
-function amountWords({ value, unit }: TimeToReach): string {
-  return amount(`${value}`, unit);
+function amountWords(found: TimeToReach): string {
+  return amount(`${levelSide(found).value}`, found.unit);
+}
+
+/** "falls to 0 EUR". */
+export function levelWords(found: TimeToReach): string {
+  return `${levelSide(found).sign < 0 ? "falls" : "rises"} to ${amountWords(found)}`;
 }
 
 function reachFigure(found: TimeToReach): Figure {
@@ -109,7 +114,7 @@ function reachFigure(found: TimeToReach): Figure {
 /** The answer to "what setting": one row a solution. */
 export function showSolved(found: Solved): readonly Table[] {
   const setting = { kind: "number", digits: 8, unit: found.unit } as const;
-  const without = "risk" in found.target ? "simulated" : "exact";
+  const without = "probability" in found.target ? "simulated" : "exact";
   return [
     table({
       title: `What ${found.vary} must be`,

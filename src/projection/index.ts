@@ -3,7 +3,15 @@ export type { Band } from "./ensemble/band.js";
 export { blockStreams } from "./ensemble/block-streams.js";
 export { type EnsembleRun, runEnsemble, type Starts } from "./ensemble/ensemble.js";
 export type { Growth } from "./ensemble/growth.js";
-export { type Direction, type Passage, passageLog, type Watch } from "./ensemble/passage.js";
+export {
+  type CrossedLevel,
+  crossedLevel,
+  type LevelSide,
+  levelSide,
+  type Passage,
+  passageLog,
+  type Watch,
+} from "./ensemble/passage.js";
 export { type FitGround, fitGround } from "./fit-ground.js";
 export { type Forecast, forecast } from "./forecast.js";
 export type { ForecastOptions } from "./forecast-options.js";

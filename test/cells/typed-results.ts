@@ -39,7 +39,7 @@ const rivals = compare([fitted, fitted]);
 const comparisonIsNoNumber: number = rivals;
 
 const ahead = forecast(fitted, { periods: 12 });
-const ready = timeToReach(ahead, { state: "N", value: 60, direction: "rising" });
+const ready = timeToReach(ahead, { state: "N", risesTo: 60 });
 const sentence: string = ready.sentence;
 // @ts-expect-error
 const sentenceIsNoNumber: number = ready.sentence;

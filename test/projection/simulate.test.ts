@@ -77,7 +77,7 @@ test("a walk in unit normal steps passes a level by n with the exact probability
     periods: 1,
     noise: { x: { distribution: "normal", sd: 1 } },
     paths,
-    watch: [{ value: 0, direction: "falling" }],
+    watch: [{ fallsTo: 0 }],
   });
   const passed = found.groups[0]!.passages[0]!.at.filter(Number.isFinite).length / paths;
   const exact = 1 - normalCdf(1);

@@ -168,7 +168,7 @@ describe("Carlson's yeast record", () => {
     expect(off(central[24], 662.927611)).toBeLessThan(1e-6);
     const capacity = named(stepped, "K").value;
     const at = (share: number): number | undefined =>
-      timeToReach(ahead, { value: share * capacity, direction: "rising" }).groups[0]!.time;
+      timeToReach(ahead, { risesTo: share * capacity }).groups[0]!.time;
     // Source: closed form of the same fit, printed to ten digits; between whole hours the rule's path is the logistic curve
     // itself. K comes from a search that stops at a relative 1e-5, which moves the times by less than 1e-6 of themselves.
     expect(off(at(0.95), 13.19062601)).toBeLessThan(1e-6);

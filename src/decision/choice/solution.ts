@@ -35,12 +35,12 @@ export interface Solution {
   /** Rounded to the multiple asked for. */
   readonly value: number;
   readonly exact: number;
-  /** The measure at `value`, with its Monte-Carlo error where it is a risk. */
+  /** The measure at `value`, with its Monte-Carlo error where it is simulated. */
   readonly achieved: number;
   readonly achievedError: number;
   /** Which side of the setting meets an `atMost` or `atLeast`. */
   readonly meets: "this value only" | "this value and above" | "this value and below";
-  /** From the uncertainty of a fit's parameters; absent for a rule, and where the measure is a risk, which carries it. */
+  /** From the uncertainty of a fit's parameters; absent for a rule, and where the measure is a probability, which carries it. */
   readonly margin: SettingMargin | undefined;
 }
 

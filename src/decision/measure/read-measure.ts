@@ -9,7 +9,7 @@ import { type Measure, measureOf } from "./measure.js";
 export type MeasureReader = (ground: Ground) => number;
 
 /**
- * A reader of a measure other than a risk. A time that is never reached within the projection is infinite.
+ * A reader of a measure other than a probability. A time that is never reached within the projection is infinite.
  *
  * @throws {ModelError} `unknown-name` | `outside-projection`.
  */
@@ -76,7 +76,7 @@ function timeReader(
   const smooth = standing.rule.inputs.length === 0 && kinks.length + jumps.length === 0;
   return (ground) => {
     const path = column(ground);
-    const at = crossing(path, 0, path.length, measure.value, measure.direction, smooth);
+    const at = crossing(path, 0, path.length, measure, smooth);
     if (at === undefined) return Number.POSITIVE_INFINITY;
     return standing.timeAt(smooth ? at.between : at.period);
   };

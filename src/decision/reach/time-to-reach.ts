@@ -1,4 +1,4 @@
-import type { Forecast, Simulation } from "../../projection/index.js";
+import { crossedLevel, type Forecast, levelSide, type Simulation } from "../../projection/index.js";
 import { type Rule, roughness } from "../../rule/index.js";
 import { refuseFewUnits, refuseLevel, refuseStateUnknown, refuseTarget } from "../refusals.js";
 import { acrossUnits } from "./across-units.js";
@@ -18,7 +18,7 @@ import { groupSentence, reachSentence } from "./reach-sentence.js";
  * straight line where the rule has kinks, its path turns, or chance moves it.
  *
  * @throws {ModelError} `unknown-state` | `target-not-finite` | `level-outside` | `paths-not-kept` | `too-few-units`.
- * @example timeToReach(forecast(fitted, { periods: 20 }), { value: 120, direction: "rising" }).sentence;
+ * @example timeToReach(forecast(fitted, { periods: 20 }), { risesTo: 120 }).sentence;
  */
 export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOptions): TimeToReach {
   const rule = ruleOf(ahead);
@@ -51,7 +51,8 @@ function isSmooth(rule: Rule): boolean {
 }
 
 function questionOf(ahead: Forecast | Simulation, rule: Rule, options: TimeToReachOptions): ReachQuestion {
-  const { value, direction, level = 0.95, state = rule.states[0]! } = options;
+  const { level = 0.95, state = rule.states[0]! } = options;
+  const { value } = levelSide(options);
   if (!rule.states.includes(state)) throw refuseStateUnknown(state, rule.states);
   if (!Number.isFinite(value)) throw refuseTarget(value);
   if (!(level > 0 && level < 1)) throw refuseLevel(level);
@@ -61,8 +62,7 @@ function questionOf(ahead: Forecast | Simulation, rule: Rule, options: TimeToRea
     state,
     unit: ahead.groups[0]!.states.find((each) => each.state === state)!.unit,
     periodUnit: period,
-    value,
-    direction,
+    ...crossedLevel(options),
     level,
     margin: marginOf(ahead),
   };

@@ -1,8 +1,13 @@
 import type { Fit } from "../../estimate/index.js";
 import { randomStream } from "../../numeric/index.js";
-import { isRisk, type Measure, measureWords } from "../measure/measure.js";
+import { isProbability, type Measure, measureWords } from "../measure/measure.js";
 import { measureReader } from "../measure/read-measure.js";
-import { refuseNoCandidate, refuseNoPurpose, refuseRiskObjective, refuseStateUnknown } from "../refusals.js";
+import {
+  refuseNoCandidate,
+  refuseNoPurpose,
+  refuseProbabilityObjective,
+  refuseStateUnknown,
+} from "../refusals.js";
 import { amount, percent, plain } from "../words/amount.js";
 import { type ImaginedReadings, imaginedReadings } from "./imagined-readings.js";
 import { narrowingAt } from "./narrowing.js";
@@ -63,7 +68,7 @@ export interface NextReading {
  * weighed by how well they foretell it. Nothing is refitted; the Monte-Carlo error is given with each gain.
  *
  * @param fits - one fit with `answer`, or several fits of the same record.
- * @throws {ModelError} `no-purpose` | `no-candidate` | `unknown-state` | `risk-not-smooth` | `future-input-missing`.
+ * @throws {ModelError} `no-purpose` | `no-candidate` | `unknown-state` | `probability-not-smooth` | `future-input-missing`.
  * @example nextReading(fitted, { periods: 10, answer: { parameter: "K" } }).purpose // "narrow the answer"
  */
 export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOptions): NextReading {
@@ -71,7 +76,7 @@ export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOpti
   const [first] = all;
   const { answer, replicates = 1, seed = 1, paths: draws = 1000, periods, cost = () => 1 } = options;
   if (first === undefined || (all.length === 1 && answer === undefined)) throw refuseNoPurpose();
-  if (answer !== undefined && isRisk(answer)) throw refuseRiskObjective();
+  if (answer !== undefined && isProbability(answer)) throw refuseProbabilityObjective();
   const state = options.state ?? first.rule.states[0]!;
   const group = options.group === undefined ? {} : { group: options.group };
   const rivals = all.map((fit) => {

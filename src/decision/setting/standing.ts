@@ -25,12 +25,12 @@ export interface StandingOptions {
   /** Of a rule: its parameters and first values. */
   readonly parameters?: Readonly<Record<string, number>>;
   readonly initial?: InitialValues;
-  /** Of a rule: random change by state, for risks. */
+  /** Of a rule: random change by state, for probabilities. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
   /** Of a rule: what a period is called, and what the present one is numbered; default "period" and 0. */
   readonly period?: string;
   readonly startsAt?: number;
-  /** Drawn paths for risks and margins; default 2000. */
+  /** Paths for probabilities and margins; default 2000. */
   readonly paths?: number;
   /** Default 1. */
   readonly seed?: number;

@@ -15,19 +15,22 @@ export interface Estimated {
 export type EstimatedReader = (setting?: Setting, value?: number) => Estimated;
 
 /**
- * Reads a risk: the share of paths that ever get to the value ahead of the present. Every setting meets the same
+ * Reads a probability: the share of paths that ever get to the value ahead of the present. Every setting meets the same
  * random numbers, and for a fit the same drawn parameters.
  *
  * @throws {ModelError} `unknown-name` | `nothing-random`.
  */
-export function riskReader(standing: Standing, measure: Extract<Measure, { risk: string }>): EstimatedReader {
+export function probabilityReader(
+  standing: Standing,
+  measure: Extract<Measure, { probability: string }>,
+): EstimatedReader {
   const { rule, paths, present } = standing;
-  const place = rule.states.indexOf(measure.risk);
-  if (place < 0) throw refuseMeasureName(measure.risk, rule.states);
-  if (!hasChance(standing)) throw refuseNoChance(measure.risk);
+  const place = rule.states.indexOf(measure.probability);
+  if (place < 0) throw refuseMeasureName(measure.probability, rule.states);
+  if (!hasChance(standing)) throw refuseNoChance(measure.probability);
   const run = chanceRun(standing);
   return (setting, value) => {
-    const log = passageLog(paths, measure.value, measure.direction);
+    const log = passageLog(paths, measure);
     const onRow = (t: number, values: readonly Float64Array[]): void => {
       if (t > present) log.add(t, values[place]!);
     };
