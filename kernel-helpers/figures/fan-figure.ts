@@ -1,3 +1,4 @@
+import { percent } from "../wording/index.js";
 import { type Axis, type Figure, figure, type Panel } from "./figure.js";
 import type { Layer } from "./layer.js";
 import { type DrawnLine, type RecordedSeries, recordedStyle } from "./recorded-series.js";
@@ -64,7 +65,6 @@ export function fanFigure({ title, x, y, series, threshold, event, notes = [] }:
 
 function fanLayers({ recorded, central, bands, recordEnd, horizon }: ProjectedSeries): Layer[] {
   const nested = [...bands].sort((a, b) => b.level - a.level);
-  const percent = (level: number): string => `${Number((100 * level).toPrecision(4))}%`;
   return [
     ...nested.map(({ level, of, x, lower, upper }, turn): Layer => {
       return { mark: "band", name: `${percent(level)} ${of}`, x, lower, upper, nested: turn, style: 0 };

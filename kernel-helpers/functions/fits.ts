@@ -10,7 +10,7 @@ import {
 import type { Observations } from "../../src/record/index.js";
 import type { Rule } from "../../src/rule/index.js";
 import { type Figure, fittedFigure, profileFigure } from "../figures/index.js";
-import { raised, showing, type Table, table } from "../tables/index.js";
+import { showing, superscript, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
 import { shownTogether } from "./shown-together.js";
@@ -38,7 +38,7 @@ function estimatesTable(fitted: Fit): Table {
   const limit = (value: number | undefined): number | string => value ?? "none";
   const rows = estimates(fitted).map((row: EstimateRow) => ({
     ...row,
-    unit: raised(row.unit),
+    unit: superscript(row.unit),
     error: row.standardError ?? "not determined",
     lower: limit(row.profile.lower),
     upper: limit(row.profile.upper),

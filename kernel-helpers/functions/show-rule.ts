@@ -54,7 +54,8 @@ function knownTable(named: NamedRule): Table {
     slope: "does not apply",
     when: under(when),
   }));
-  const range = named.holds.length === 0 ? [] : [`It means what it says where ${named.holds.join("; ")}.`];
+  const range =
+    named.validWhen.length === 0 ? [] : [`It means what it says where ${named.validWhen.join("; ")}.`];
   return table({
     title: named.title,
     columns: [

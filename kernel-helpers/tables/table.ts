@@ -1,4 +1,4 @@
-import { type NumberFormat, numberFormat } from "./number-format.js";
+import { type NumberFormat, numberFormat } from "../wording/index.js";
 import { columnRepeated, noColumns, unknownColumnKind } from "./refusals.js";
 import { showing } from "./show-itself.js";
 import { tableHtml } from "./table-html.js";

@@ -53,14 +53,14 @@ export function fit(rule: Rule, observations: Observations, options: FitOptions)
   checkOptions(rule, options);
   const matched = matchStates(rule, observations);
   const { groups, population } = fitGroups(rule, matched.groups, options);
-  return Object.freeze({
+  return {
     kind: "fit",
     rule,
     observations: matched,
-    options: Object.freeze({ ...options }),
-    groups: Object.freeze(groups),
-    ...(population && { population: Object.freeze(population) }),
-    warnings: Object.freeze([...rule.findings, ...inputWarnings(rule, matched, options)]),
-    conventions: Object.freeze(conventionsOf(options, groups)),
-  });
+    options: { ...options },
+    groups,
+    ...(population && { population }),
+    warnings: [...rule.findings, ...inputWarnings(rule, matched, options)],
+    conventions: conventionsOf(options, groups),
+  };
 }

@@ -60,7 +60,7 @@ export function updateFit(before: Fit, later: Observations): UpdatedFit {
       ({ group, name, was, now: is, moved }) =>
         `${name}${group && ` of ${group}`} moved from ${was.toPrecision(4)} to ${is.toPrecision(4)}, ${Math.abs(moved!).toFixed(1)} standard errors: check whether the rule still holds.`,
     );
-  return Object.freeze({ kind: "updated-fit", fit: now, added, changes: Object.freeze(changes), remarks });
+  return { kind: "updated-fit", fit: now, added, changes, remarks };
 }
 
 /** A group with later rows behind its own; their steps are counted on from its first row. */

@@ -1,6 +1,7 @@
 export { choleskyFactor, choleskyInverse, choleskySolve } from "./algebra/cholesky.js";
 export { covarianceFromTriangle, type UnscaledCovariance } from "./algebra/covariance-from-triangle.js";
 export { rotateRowIn } from "./algebra/rotate-row-in.js";
+export { freezeDeep, frozenCopy } from "./freeze-deep.js";
 export {
   type LeastSquaresProblem,
   type LeastSquaresSolution,
@@ -22,7 +23,9 @@ export {
   studentCdf,
   studentQuantile,
 } from "./probability/distributions.js";
+export { gammaDraw } from "./probability/gamma-draw.js";
 export { logGamma } from "./probability/log-gamma.js";
+export { poissonDraw } from "./probability/poisson-draw.js";
 export { quantile } from "./probability/quantile.js";
 export { type RandomStream, randomStream } from "./probability/random-stream.js";
 export { type RunHooks, reporter, type Tick, ticker } from "./run-hooks.js";

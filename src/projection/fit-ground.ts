@@ -28,9 +28,9 @@ export function fitGround(fit: Fit, group: GroupFit, periods: number, plans: Inp
   const recorded = observations.groups.find((each) => each.name === group.group)!;
   const recordEnd = recorded.index[recorded.index.length - 1]!;
   const trajectory = fit.options.errors === "observation";
-  const reach = Math.max(0, ...rule.memory.map(({ lag }) => lag));
+  const reach = Math.max(0, ...rule.lags.map(({ lag }) => lag));
   const from = trajectory ? reach : recordEnd;
-  const slots = [...rule.states.map((state) => ({ state, lag: 0 })), ...rule.memory];
+  const slots = [...rule.states.map((state) => ({ state, lag: 0 })), ...rule.lags];
   const names = slots.map(({ state, lag }) => `${state}[${reach - lag}]`);
   const belief = beliefOf(fit, group);
   const initial = Float64Array.from(slots, ({ state, lag }, s) => {

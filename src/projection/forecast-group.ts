@@ -1,6 +1,6 @@
 import type { Fit, GroupFit } from "../estimate/index.js";
 import { type RandomStream, reporter } from "../numeric/index.js";
-import { readsPeriod } from "../rule/index.js";
+import { dependsOnPeriod } from "../rule/index.js";
 import { type CentralPath, centralPath, stateLimits } from "./central-path.js";
 import { keepLimit } from "./check-run.js";
 import { blockStreams } from "./ensemble/block-streams.js";
@@ -157,7 +157,7 @@ function passagesFor(fit: Fit, mean: Gatherer, future: Gatherer): readonly Float
 
 function predicted(ground: FitGround, starts: DrawnStarts, firstError: number): Predictability | undefined {
   const { rule, compiled, parameters, initial } = ground;
-  if (rule.inputs.length > 0 || readsPeriod(rule)) return undefined;
+  if (rule.inputs.length > 0 || dependsOnPeriod(rule)) return undefined;
   const own = { paths: 1, size: parameters.length, parameters, initial };
   return predictabilityOf(compiled, initial.length, own, starts, firstError);
 }

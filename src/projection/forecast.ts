@@ -42,10 +42,10 @@ export function forecast(fit: Fit, options: ForecastOptions): Forecast {
     stream = stream.jump();
     return forecastGroup(fit, group, scenarios, { ...options, ...settings }, own);
   });
-  return Object.freeze({
+  return {
     kind: "forecast",
     fit,
-    options: Object.freeze(settings),
-    groups: Object.freeze(groups),
-  });
+    options: settings,
+    groups,
+  };
 }

@@ -91,13 +91,13 @@ export function simulate(rule: Rule, options: SimulateOptions): Simulation {
     const ground = { rule, compiled, parameters, initial, inputs, from: 0, periods };
     return simulated(ground, name, plans, { ...options, ...settings }, change);
   });
-  return Object.freeze({
+  return {
     kind: "simulation",
     rule,
-    parameters: Object.freeze(Object.fromEntries(rule.parameters.map((name, i) => [name, parameters[i]!]))),
-    options: Object.freeze(settings),
-    groups: Object.freeze(groups),
-  });
+    parameters: Object.fromEntries(rule.parameters.map((name, i) => [name, parameters[i]!])),
+    options: settings,
+    groups,
+  };
 }
 
 type Settled = SimulateOptions & Required<Pick<SimulateOptions, "paths" | "seed" | "levels">>;

@@ -23,6 +23,7 @@ export type {
 export { observations } from "./observe.js";
 export { packed } from "./packed.js";
 export type { CalendarName } from "./period/calendar.js";
+export { indexOf, labelAt, labelsAt, type PeriodAxis, periodsAfter } from "./period/period-axis.js";
 export { tableOfRows } from "./table-of-rows.js";
 export { type FillOptions, filled } from "./tables/filled.js";
 export type { PeriodsOf } from "./tables/placed-series.js";

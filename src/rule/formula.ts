@@ -35,17 +35,17 @@ function formulaOf(rule: Rule, text: string): Formula {
   };
 }
 
-const known = new Map<string, Formula>();
+const cache = new Map<string, Formula>();
 
 /** Reads an expression of the rule language; a condition has the value 1 or 0. */
-export function formula(text: string, sort: "number" | "condition" = "number"): Formula {
-  const key = `${sort}:${text}`;
-  let found = known.get(key);
+export function formula(text: string, kind: "number" | "condition" = "number"): Formula {
+  const key = `${kind}:${text}`;
+  let found = cache.get(key);
   if (found === undefined) {
     // The name of the value is one that no formula uses.
-    const body = sort === "number" ? text : `if(${text}, 1, 0)`;
+    const body = kind === "number" ? text : `if(${text}, 1, 0)`;
     found = formulaOf(makeRule(`value_of_formula[t+1] = ${body}`, {}), text);
-    known.set(key, found);
+    cache.set(key, found);
   }
   return found;
 }

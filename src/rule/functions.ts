@@ -1,15 +1,20 @@
 /** What a rule may call: how many values it takes and what it gives. */
 export interface RuleFunction {
   readonly name: string;
-  readonly fewest: number;
-  readonly most: number;
+  readonly minArgs: number;
+  readonly maxArgs: number;
   /** How it is written, for help. */
   readonly usage: string;
   readonly meaning: string;
 }
 
-const entry = (name: string, fewest: number, most: number, usage: string, meaning: string): RuleFunction =>
-  Object.freeze({ name, fewest, most, usage, meaning });
+const entry = (
+  name: string,
+  minArgs: number,
+  maxArgs: number,
+  usage: string,
+  meaning: string,
+): RuleFunction => Object.freeze({ name, minArgs, maxArgs, usage, meaning });
 
 /** Every function of the rule language. A name that is not here is not a function. */
 export const ruleFunctions: readonly RuleFunction[] = Object.freeze([

@@ -2,6 +2,8 @@ import type { ProcessNoise } from "./rule.js";
 
 /** What can be said of a rule beside its text. */
 export interface RecurrenceOptions {
+  /** What the rule is called in titles, tables and sentences; default: its text, or its name in the catalogue. */
+  readonly name?: string;
   /** The only names that are parameters; any other free name is then refused. Default: every free name is one. */
   readonly parameters?: readonly string[];
   /** Names that are recorded by period: columns of the record. Only they may be read at [t+1]. */

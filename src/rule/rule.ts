@@ -13,6 +13,8 @@ export interface ProcessNoise {
 /** A recurrence: text that was read, checked, and made ready to be run, differentiated and printed. */
 export interface Rule {
   readonly kind: "rule";
+  /** What it is called in titles, tables and sentences; absent where neither the options nor the catalogue say. */
+  readonly name?: string;
   /** The text as given, normalised (NFC), comments kept. */
   readonly text: string;
   /** How the first state is stated: `X[t+1] = ...` or `ΔX = ...`. */
@@ -22,7 +24,7 @@ export interface Rule {
    * Past values that the rule reads, for rules with lags; empty otherwise. The state vector of the compiled
    * rule is the states in order and then these.
    */
-  readonly memory: readonly { readonly state: string; readonly lag: number }[];
+  readonly lags: readonly { readonly state: string; readonly lag: number }[];
   /** Named values inside the period, in event order. */
   readonly quantities: readonly string[];
   readonly inputs: readonly string[];

@@ -46,15 +46,15 @@ export async function readTable(path: string, options: ReadOptions = {}): Promis
   const found = named === format ? [] : [`The file is ${format} by its contents, whatever its name says.`];
   const rows = read.columns[0]?.length ?? 0;
   if (rows === 0) throw emptyFile(path);
-  const source = Object.freeze({
+  const source = {
     path,
     format,
     checksum: scan.checksum,
     bytes: scan.bytes,
     rows,
-    found: Object.freeze([...found, ...read.found]),
-  });
-  return Object.freeze({ names: read.names, columns: read.columns, source });
+    found: [...found, ...read.found],
+  };
+  return { names: read.names, columns: read.columns, source };
 }
 
 function isText(format: Format): boolean {

@@ -102,7 +102,7 @@ describe("inspection", () => {
 
   test("inside the text of a rule tells of its names and functions", async () => {
     expect(await about('recurrence("N[t+1] = mi|n(N, K)")')).toContain("smallest");
-    expect(await about('recurrence("N[t+1] = N + r*N*(1 - N/K|)")')).toContain("constant of this rule");
+    expect(await about('recurrence("N[t+1] = N + r*N*(1 - N/K|)")')).toContain("parameter of this rule");
   });
 
   test("finds nothing where nothing is", async () => {
@@ -126,7 +126,7 @@ describe("the text of a rule", () => {
   test("is read with the names that the call declares", async () => {
     const good = 'recurrence("owed[t+1] = owed*(1 + rate) - paid[t+1]", { inputs: ["paid"] }).inputs';
     expect((await kernel.run(good)).value).toBe("[ 'paid' ]");
-    const unknown = 'recurrence("N[t+1] = N + r*N*(1 - N/capcity)", { constants: ["r", "capacity"] })';
+    const unknown = 'recurrence("N[t+1] = N + r*N*(1 - N/capcity)", { parameters: ["r", "capacity"] })';
     expect((await kernel.run(unknown)).reply["evalue"]).toContain("capcity");
   });
 

@@ -1,5 +1,5 @@
 import { expect, test } from "vitest";
-import { eventOrder, recurrence, roughness, ruleTex } from "../../src/rule/index.js";
+import { eventOrder, nonsmoothCalls, recurrence, ruleTex } from "../../src/rule/index.js";
 
 test("TeX is set as a paper would: fractions, subscripts, side-by-side products", () => {
   expect(ruleTex(recurrence("ΔN = r*N*(1 - N/K)"))).toBe(
@@ -33,7 +33,7 @@ test("the order of events is the order of the lines", () => {
 
 test("kinks and jumps are listed where a fit could meet them", () => {
   const rule = recurrence("N[t+1] = max(N - c, 0) + floor(N) + mod(t, 12)");
-  expect(roughness(rule)).toEqual({
+  expect(nonsmoothCalls(rule)).toEqual({
     kinks: [{ function: "max", start: 9, end: 22 }],
     jumps: [{ function: "floor", start: 25, end: 33 }],
   });

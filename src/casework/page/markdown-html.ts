@@ -1,5 +1,5 @@
 import { Marked, type Tokens } from "marked";
-import { escapeText } from "./escape-text.js";
+import { escapeHtml } from "../../../kernel-helpers/wording/index.js";
 import { joined, type ShownCell } from "./shown-notebook.js";
 
 type Attachments = NonNullable<ShownCell["attachments"]>;
@@ -12,16 +12,16 @@ export function markdownHtml(source: string, attachments: Attachments = {}): str
   const marked = new Marked({
     gfm: true,
     renderer: {
-      html: ({ text }: Tokens.HTML | Tokens.Tag) => escapeText(text),
+      html: ({ text }: Tokens.HTML | Tokens.Tag) => escapeHtml(text),
       link({ href, tokens }: Tokens.Link) {
         const text = this.parser.parseInline(tokens);
-        return isLink(href) ? `<a href="${escapeText(href)}" rel="noreferrer">${text}</a>` : text;
+        return isLink(href) ? `<a href="${escapeHtml(href)}" rel="noreferrer">${text}</a>` : text;
       },
       image({ href, text }: Tokens.Image) {
         const source = carried(href, attachments);
         return source
-          ? `<img src="${source}" alt="${escapeText(text)}">`
-          : `<em>${escapeText(text || href)}</em>`;
+          ? `<img src="${source}" alt="${escapeHtml(text)}">`
+          : `<em>${escapeHtml(text || href)}</em>`;
       },
     },
   });
@@ -41,5 +41,5 @@ function carried(href: string, attachments: Attachments): string | undefined {
   const kept = Object.hasOwn(attachments, name) ? attachments[name] : undefined;
   const [type, data] =
     Object.entries(kept ?? {}).find(([kind]) => /^image\/(png|jpeg|gif|webp)$/.test(kind)) ?? [];
-  return type && `data:${type};base64,${escapeText(joined(data))}`;
+  return type && `data:${type};base64,${escapeHtml(joined(data))}`;
 }

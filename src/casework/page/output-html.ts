@@ -1,4 +1,5 @@
-import { escapeTerminal, escapeText } from "./escape-text.js";
+import { escapeHtml } from "../../../kernel-helpers/wording/index.js";
+import { escapeTerminal } from "./escape-text.js";
 import { markdownHtml } from "./markdown-html.js";
 import { joined, type ShownOutput } from "./shown-notebook.js";
 
@@ -6,7 +7,7 @@ type Draw = (data: string) => string;
 
 const image = (type: string): Draw => {
   return (data) =>
-    `<img src="data:${type};base64,${escapeText(data.replace(/\s/g, ""))}" alt="picture made by the code above">`;
+    `<img src="data:${type};base64,${escapeHtml(data.replace(/\s/g, ""))}" alt="picture made by the code above">`;
 };
 
 // Richest first: the page shows the first of these that an output has.
@@ -40,7 +41,7 @@ function outputHtml(output: ShownOutput): string {
   const data = output.data ?? {};
   const type = Object.keys(drawings).find((kind) => Object.hasOwn(data, kind));
   if (type !== undefined) return (drawings[type] as Draw)(joined(data[type]));
-  return `<pre>${escapeText(JSON.stringify(data, null, 1))}</pre>`;
+  return `<pre>${escapeHtml(JSON.stringify(data, null, 1))}</pre>`;
 }
 
 function mergedStreams(outputs: readonly ShownOutput[]): ShownOutput[] {

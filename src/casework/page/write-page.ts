@@ -1,5 +1,5 @@
+import { escapeHtml } from "../../../kernel-helpers/wording/index.js";
 import { type CaseHead, caseHead, leftOut } from "./case-head.js";
-import { escapeText } from "./escape-text.js";
 import { figureLibrary } from "./figure-library.js";
 import { markdownHtml } from "./markdown-html.js";
 import { outputsHtml } from "./output-html.js";
@@ -34,10 +34,10 @@ export function writePage(notebook: ShownNotebook, options: PageOptions = {}): s
     '<!doctype html>\n<html lang="en"><head><meta charset="utf-8">',
     `<meta http-equiv="Content-Security-Policy" content="${policy}">`,
     '<meta name="viewport" content="width=device-width,initial-scale=1">',
-    `<title>${escapeText(title)}</title><style>${pageStyle}</style></head><body><main>`,
+    `<title>${escapeHtml(title)}</title><style>${pageStyle}</style></head><body><main>`,
     headHtml(head, title),
     body,
-    options.source ? `<footer>Written from ${escapeText(options.source)}.</footer>` : "",
+    options.source ? `<footer>Written from ${escapeHtml(options.source)}.</footer>` : "",
     `</main>${body.includes('class="pw-figure') ? figureLibrary() : ""}</body></html>\n`,
   ].join("\n");
 }
@@ -45,9 +45,9 @@ export function writePage(notebook: ShownNotebook, options: PageOptions = {}): s
 function headHtml({ question, about, answers }: CaseHead, title: string): string {
   const said = answers.map(answerHtml).join("");
   return [
-    `<header><h1 dir="auto">${escapeText(title)}</h1>`,
-    question ? `<p class="question" dir="auto">${escapeText(question)}</p>` : "",
-    about ? `<p class="about" dir="auto">${escapeText(about)}</p>` : "",
+    `<header><h1 dir="auto">${escapeHtml(title)}</h1>`,
+    question ? `<p class="question" dir="auto">${escapeHtml(question)}</p>` : "",
+    about ? `<p class="about" dir="auto">${escapeHtml(about)}</p>` : "",
     said ? `<section class="answer" aria-label="Answer"><b>Answer</b>${said}</section>` : "",
     "</header>",
   ].join("");
@@ -58,20 +58,20 @@ function answerHtml({ sentence, cautions }: CaseHead["answers"][number]): string
   const [, first = sentence, rest = ""] = /^(.+?[.!?])\s+(?=\p{Lu})(.*)$/su.exec(sentence) ?? [];
   const more = [...(rest === "" ? [] : [rest]), ...cautions.map((caution) => `Caution: ${caution}`)];
   return [
-    `<p dir="auto">${escapeText(first)}</p>`,
-    ...more.map((text) => `<p class="rest" dir="auto">${escapeText(text)}</p>`),
+    `<p dir="auto">${escapeHtml(first)}</p>`,
+    ...more.map((text) => `<p class="rest" dir="auto">${escapeHtml(text)}</p>`),
   ].join("");
 }
 
 function cellHtml(cell: ShownCell, title: string): string {
   const source = joined(cell.source);
   if (cell.cell_type === "markdown") return markdownHtml(withoutTitle(source, title), cell.attachments);
-  if (cell.cell_type !== "code") return `<pre>${escapeText(source)}</pre>`;
+  if (cell.cell_type !== "code") return `<pre>${escapeHtml(source)}</pre>`;
   const step = cell.execution_count ? ` of step ${cell.execution_count}` : "";
   const code =
     source.trim() === ""
       ? ""
-      : `<details class="code"><summary>Code${step}</summary><pre>${escapeText(source)}</pre></details>`;
+      : `<details class="code"><summary>Code${step}</summary><pre>${escapeHtml(source)}</pre></details>`;
   return code + outputsHtml((cell.outputs ?? []).filter((output) => !leftOut(output)));
 }
 

@@ -94,7 +94,7 @@ export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum
   };
   const notes = signNotes(standing, setting, answer.value, measure, answer.achieved);
   const sentence = [bestSentence(answer, measure, sign, standing), ...notes].join(" ");
-  return Object.freeze({ kind: "optimum", ...answer, sentence });
+  return { kind: "optimum", ...answer, sentence };
 }
 
 /** The objective, turned so that the best is the highest; a place without a value is the lowest. */

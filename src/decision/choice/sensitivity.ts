@@ -67,14 +67,14 @@ export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): S
     "time" in options.answer
       ? standing.periodUnit
       : standing.unitOf(Object.values(options.answer)[0] as string);
-  return Object.freeze({
+  return {
     kind: "sensitivity",
     measure,
     unit,
     answer,
-    rows: Object.freeze(rows),
+    rows,
     sentence: sentenceOf(options.answer, answer, rows, standing),
-  });
+  };
 }
 
 function movable({ rule, fitGround }: Standing): readonly string[] {

@@ -77,7 +77,7 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
       .slice(0, 1)
       .flatMap(({ value, achieved }) => signNotes(standing, found, value, until, achieved)),
   ].join(" ");
-  return Object.freeze({ kind: "solution", ...answer, sentence });
+  return { kind: "solution", ...answer, sentence };
 }
 
 function rangeable(

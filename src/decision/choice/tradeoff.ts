@@ -76,15 +76,15 @@ export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeof
       signNotes(standing, setting, row.value, measure, row.answers[shown]!),
     ),
   );
-  return Object.freeze({
+  return {
     kind: "tradeoff",
     vary: name,
     unit,
-    measures: Object.freeze(measures),
+    measures,
     answers,
-    rows: Object.freeze(rows),
+    rows,
     sentence: [sentenceOf(name, unit, rows, answers, standing), ...new Set(notes)].join(" "),
-  });
+  };
 }
 
 function valuesOf(values: TradeoffOptions["values"]): readonly number[] {

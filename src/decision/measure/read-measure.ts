@@ -1,5 +1,5 @@
 import { centralPath, type Ground } from "../../projection/index.js";
-import { quantitiesAt, roughness } from "../../rule/index.js";
+import { nonsmoothCalls, quantitiesAt } from "../../rule/index.js";
 import { crossing } from "../reach/crossing.js";
 import { refuseMeasureName, refuseMeasureWindow } from "../refusals.js";
 import type { Standing } from "../setting/standing.js";
@@ -72,7 +72,7 @@ function timeReader(
   measure: Extract<Measure, { time: string }>,
   column: (ground: Ground) => readonly number[],
 ): MeasureReader {
-  const { kinks, jumps } = roughness(standing.rule);
+  const { kinks, jumps } = nonsmoothCalls(standing.rule);
   const smooth = standing.rule.inputs.length === 0 && kinks.length + jumps.length === 0;
   return (ground) => {
     const path = column(ground);

@@ -1,5 +1,5 @@
 import { crossedLevel, type Forecast, levelSide, type Simulation } from "../../projection/index.js";
-import { type Rule, roughness } from "../../rule/index.js";
+import { nonsmoothCalls, type Rule } from "../../rule/index.js";
 import { refuseFewUnits, refuseLevel, refuseStateUnknown, refuseTarget } from "../refusals.js";
 import { acrossUnits } from "./across-units.js";
 import { groupReach } from "./group-reach.js";
@@ -26,19 +26,19 @@ export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOp
   const smooth = rule.inputs.length === 0 && isSmooth(rule);
   const groups = ahead.groups.map((group) => {
     const answer = groupReach(ahead, group, question, smooth);
-    return Object.freeze({ ...answer, sentence: groupSentence(ahead, answer, question) });
+    return { ...answer, sentence: groupSentence(ahead, answer, question) };
   });
   const asked = options.newUnit === true && ahead.kind === "forecast";
   if (asked && groups.length < 3) throw refuseFewUnits(groups.length);
   const across = asked ? acrossUnits(groups, question.level) : undefined;
   const sentence = reachSentence(ahead, groups, across, question);
-  return Object.freeze({
+  return {
     kind: "time-to-reach",
     ...question,
-    groups: Object.freeze(groups),
+    groups,
     across,
     sentence,
-  });
+  };
 }
 
 function ruleOf(ahead: Forecast | Simulation): Rule {
@@ -46,7 +46,7 @@ function ruleOf(ahead: Forecast | Simulation): Rule {
 }
 
 function isSmooth(rule: Rule): boolean {
-  const { kinks, jumps } = roughness(rule);
+  const { kinks, jumps } = nonsmoothCalls(rule);
   return kinks.length === 0 && jumps.length === 0;
 }
 

@@ -98,11 +98,11 @@ export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOpti
     state,
     replicates,
     periodUnit: standing.periodUnit,
-    choices: Object.freeze(choices),
+    choices,
     recommended: best,
   };
   const about = separating ? "" : measureWords(answer, standing);
-  return Object.freeze({ kind: "next-reading", ...found, sentence: sentenceOf(found, about, rivals.length) });
+  return { kind: "next-reading", ...found, sentence: sentenceOf(found, about, rivals.length) };
 }
 
 /** What a reading brings, by its row in every rival's path. */

@@ -172,11 +172,11 @@ export function bifurcations(rule: Rule, options: BifurcationsOptions): Bifurcat
     held.width === 1
       ? followedCycle({ held, slot, to }, from, start[0]!, limit)
       : followRestLevel(held, slot, { from, to }, start, limit);
-  return Object.freeze({
+  return {
     kind: "bifurcations",
     rule,
     vary,
-    places: Object.freeze(found.places),
+    places: found.places,
     stop: found.stop,
-  });
+  };
 }

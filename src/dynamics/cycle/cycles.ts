@@ -52,14 +52,14 @@ function described(held: HeldStep, points: readonly number[]): Cycle {
   const [multiplier] = multipliersOf(Float64Array.of(slope), 1);
   const stability = stabilityOf([multiplier!]);
   const list = points.map(shown).join(", ");
-  return Object.freeze({
-    points: Object.freeze([...points]),
+  return {
+    points: [...points],
     multiplier: multiplier!,
     residual,
     superstable: Math.abs(slope) < 1e-9,
     ...stability,
     sentence: `The cycle of ${points.length} values ${list} ${stability.words}.`,
-  });
+  };
 }
 
 /**
@@ -72,22 +72,20 @@ function described(held: HeldStep, points: readonly number[]): Cycle {
 export function cycles(rule: Rule, options: CyclesOptions): Cycles {
   const period = options?.period;
   if (period === undefined) throw missingPeriod();
-  if (rule.states.length !== 1 || rule.memory.length > 0) throw oneStateOnly("A cycle", rule.states);
+  if (rule.states.length !== 1 || rule.lags.length > 0) throw oneStateOnly("A cycle", rule.states);
   if (!Number.isSafeInteger(period) || period < 1 || period > 64) {
     throw unreadableOption("period", "a whole number from 1 to 64", period);
   }
   const held = holdStep(rule, options, "cycle");
   const within = searchRanges(rule, held.parameters, options.range)[0]!;
   const found = cyclesOfOneState(held, period, within);
-  return Object.freeze({
+  return {
     kind: "cycles",
     rule,
     period,
-    parameters: Object.freeze(
-      Object.fromEntries(rule.parameters.map((name, i) => [name, held.parameters[i]!])),
-    ),
+    parameters: Object.fromEntries(rule.parameters.map((name, i) => [name, held.parameters[i]!])),
     range: within,
-    cycles: Object.freeze(found.cycles.map((points) => described(held, points))),
+    cycles: found.cycles.map((points) => described(held, points)),
     search: found.complete ? "every" : "cut-short",
-  });
+  };
 }

@@ -9,7 +9,7 @@ function linearisedGap(held: HeldStep, present: Float64Array): { gap: Float64Arr
   const slopes = Matrix.zeros(states, states);
   for (let i = 0; i < states; i++) {
     for (let slot = 0; slot < width; slot++) {
-      const column = slot < states ? slot : rule.states.indexOf(rule.memory[slot - states]!.state);
+      const column = slot < states ? slot : rule.states.indexOf(rule.lags[slot - states]!.state);
       slopes.set(i, column, slopes.get(i, column) + matrix[i * width + slot]!);
     }
     slopes.set(i, i, slopes.get(i, i) - 1);

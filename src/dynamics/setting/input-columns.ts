@@ -1,4 +1,4 @@
-import { inputReach, type Rule } from "../../rule/index.js";
+import { inputOffsets, type Rule } from "../../rule/index.js";
 import { missingInput, missingValue, strangeName } from "../refusals.js";
 
 /** By input: one value a period from period 0, or one number that holds throughout. */
@@ -22,7 +22,7 @@ export function inputColumns(
   for (const name of Object.keys(given)) {
     if (!rule.inputs.includes(name)) throw strangeName("input", name, rule.inputs);
   }
-  const reach = inputReach(rule);
+  const reach = inputOffsets(rule);
   return rule.inputs.map((name, slot) => {
     if (!Object.hasOwn(given, name)) throw missingValue("input", name, Object.keys(given));
     const [earliest, latest] = reach[slot]!;

@@ -1,4 +1,10 @@
-import { compileRule, explainFailure, quantitiesAt, type Rule, type StepPlace } from "../../rule/index.js";
+import {
+  compileRule,
+  explainFailure,
+  quantitiesAt,
+  type Rule,
+  type StepArguments,
+} from "../../rule/index.js";
 import { unreadableOption } from "../refusals.js";
 import { type InputValues, inputColumns } from "../setting/input-columns.js";
 import { type InitialValues, initialVector, parametersBySlot } from "../setting/setting.js";
@@ -50,7 +56,7 @@ interface Run {
   readonly table: Float64Array;
 }
 
-function placeAt(run: Run, row: number): StepPlace {
+function placeAt(run: Run, row: number): StepArguments {
   const state = run.table.subarray(row * run.width, (row + 1) * run.width);
   return { state, parameters: run.parameters, inputs: run.inputs, t: run.from + row };
 }
@@ -104,7 +110,7 @@ function quantityColumns(run: Run, rows: number): Readonly<Record<string, Float6
       columns[k]![row] = value;
     });
   }
-  return Object.freeze(Object.fromEntries(quantities.map((name, k) => [name, columns[k]!])));
+  return Object.fromEntries(quantities.map((name, k) => [name, columns[k]!]));
 }
 
 /**
@@ -133,14 +139,14 @@ export function trajectory(rule: Rule, options: TrajectoryOptions): Trajectory {
   const { rows, stop } = stopOf(run, periods);
   const column = (slot: number): Float64Array =>
     Float64Array.from({ length: rows }, (_, row) => table[row * width + slot]!);
-  return Object.freeze({
+  return {
     kind: "trajectory",
     rule,
-    parameters: Object.freeze(Object.fromEntries(rule.parameters.map((name, i) => [name, parameters[i]!]))),
+    parameters: Object.fromEntries(rule.parameters.map((name, i) => [name, parameters[i]!])),
     startsAt: from,
     periods: rows - 1,
-    values: Object.freeze(Object.fromEntries(rule.states.map((name, slot) => [name, column(slot)]))),
+    values: Object.fromEntries(rule.states.map((name, slot) => [name, column(slot)])),
     quantities: quantityColumns(run, rows),
-    stop: Object.freeze(stop),
-  });
+    stop,
+  };
 }

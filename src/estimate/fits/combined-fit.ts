@@ -63,7 +63,7 @@ export function combinedFit(rule: Rule, groups: readonly ObservedGroup[], option
         partOf(found, maps[g]!, rows.size),
         measures,
       );
-      return Object.freeze({ ...part, degreesOfFreedom: left });
+      return { ...part, degreesOfFreedom: left };
     }),
   };
 }

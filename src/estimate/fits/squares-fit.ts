@@ -34,10 +34,10 @@ export function squaresFit(rule: Rule, recorded: ObservedGroup, options: FitOpti
   const measures = { criteria: criteria(found.value, whole.rows, options), sigma: undefined, exact: true };
   const fitted = describeFit(rule, group, options, unknowns, whole.rows, found, measures);
   if (robust === undefined) return fitted;
-  return Object.freeze({
+  return {
     ...fitted,
     warnings: [...fitted.warnings, ...downweighted(recorded, robust.weights)],
-  });
+  };
 }
 
 /** Names the rows that a robust fit lets count for less than half. */

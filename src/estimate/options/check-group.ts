@@ -1,5 +1,5 @@
 import type { ObservedGroup } from "../../record/index.js";
-import { inputReach, type Rule } from "../../rule/index.js";
+import { inputOffsets, type Rule } from "../../rule/index.js";
 import {
   refuseAllCensored,
   refuseInputGap,
@@ -32,7 +32,7 @@ function checkNumber(rule: Rule, group: ObservedGroup, options: FitOptions, name
 
 /** Every input must be recorded in every period that a fitted step reads. */
 function checkInputs(rule: Rule, group: ObservedGroup, options: FitOptions): void {
-  const reach = rule.inputs.length === 0 ? [] : inputReach(rule);
+  const reach = rule.inputs.length === 0 ? [] : inputOffsets(rule);
   rule.inputs.forEach((name, k) => {
     const column = group.inputs[name];
     if (!column) throw refuseMissingInput(name, group);

@@ -72,7 +72,7 @@ export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
     return rowsOf(fitted, refits, options.level ?? fit.options.level ?? 0.95);
   });
   const failed = fit.groups.length * resamples - used;
-  return Object.freeze({ kind: "bootstrap", errors, seed, rows: Object.freeze(rows), used, failed });
+  return { kind: "bootstrap", errors, seed, rows, used, failed };
 }
 
 /** The estimates of the refits, as reported. */

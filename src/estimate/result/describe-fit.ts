@@ -59,7 +59,7 @@ export function describeFit(
       behind: (value - found.value) / found.cut.variance / 2,
     })),
   };
-  return Object.freeze({ ...fitted, warnings: fitWarnings(fitted, { rule, options, unknowns, found }) });
+  return { ...fitted, warnings: fitWarnings(fitted, { rule, options, unknowns, found }) };
 }
 
 /** Values of the states where the path begins: estimated or given ones, or the first recorded ones. */

@@ -1,5 +1,5 @@
 import type { Warning } from "../../numeric/index.js";
-import { type Rule, roughness } from "../../rule/index.js";
+import { nonsmoothCalls, type Rule } from "../../rule/index.js";
 import type { FitOptions } from "../options/fit-options.js";
 import type { Optimum } from "../search/optimum.js";
 import type { Unknowns } from "../unknowns/unknowns.js";
@@ -119,7 +119,7 @@ function rivals(fit: Omit<GroupFit, "warnings">): Warning[] {
 
 /** At a smooth optimum the search ends on its gradient; on a bend of the rule it cannot. */
 function bends(fit: Omit<GroupFit, "warnings">, rule: Rule): Warning[] {
-  const [bend] = roughness(rule).kinks;
+  const [bend] = nonsmoothCalls(rule).kinks;
   const smooth = fit.stop.kind === "converged" && fit.stop.test === "gradient";
   if (bend === undefined || smooth) return [];
   return [

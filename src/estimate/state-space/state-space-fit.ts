@@ -123,16 +123,15 @@ function described(
     ...filtering,
     last: { mean: Array.from(space.belief.mean), covariance: Array.from(space.belief.covariance) },
   };
-  if (filtering.method === "exact" || options.intervals === "none")
-    return Object.freeze({ ...fitted, filter: Object.freeze(filter) });
+  if (filtering.method === "exact" || options.intervals === "none") return { ...fitted, filter };
   const check = particleCheck(space, found.at, fitted.criteria.logLikelihood);
-  if (check === undefined) return Object.freeze({ ...fitted, filter: Object.freeze(filter) });
+  if (check === undefined) return { ...fitted, filter };
   const rough = Math.abs(check.particles - check.filter) > tolerable + 2 * check.deviation;
-  return Object.freeze({
+  return {
     ...fitted,
-    filter: Object.freeze({ ...filter, check }),
+    filter: { ...filter, check },
     warnings: rough ? [...fitted.warnings, roughFilter(check)] : fitted.warnings,
-  });
+  };
 }
 
 const particles = 1000;

@@ -1,5 +1,5 @@
 import type { ObservedGroup } from "../../record/index.js";
-import { compileRule, type Rule, readsPeriod } from "../../rule/index.js";
+import { compileRule, dependsOnPeriod, type Rule } from "../../rule/index.js";
 import { type FitOptions, onLogScale } from "../options/fit-options.js";
 import type { FitRows } from "../rows/fit-rows.js";
 import { inputsByPeriod } from "../rows/inputs-by-period.js";
@@ -118,7 +118,7 @@ export function isLinearOnScale(
   options: FitOptions,
   at: Float64Array,
 ): boolean {
-  if (slotsOf(rule).length !== 1 || rule.inputs.length > 0 || readsPeriod(rule)) return false;
+  if (slotsOf(rule).length !== 1 || rule.inputs.length > 0 || dependsOnPeriod(rule)) return false;
   place(unknowns, at);
   const dynamics = dynamicsOf(rule, group, options);
   const { values } = readingsOf(rule, group, options);

@@ -59,12 +59,12 @@ export function changePoint(
     return groupChangePoint(fit, group, { leastShare, draws: resamples, level, tick }, own);
   });
   const sentence = groups.map((group) => group.sentence).join(" ");
-  return Object.freeze({
+  return {
     kind: "change-point",
     fit,
     level,
     resamples,
-    groups: Object.freeze(groups),
+    groups,
     sentence,
-  });
+  };
 }

@@ -65,7 +65,7 @@ export function groupChangePoint(
     found: probability <= 1 - search.level,
     ...datedBy(fit, group, again, scan, best, search.level),
   };
-  return Object.freeze({ ...found, sentence: breakSentence(found, fit, search.level) });
+  return { ...found, sentence: breakSentence(found, fit, search.level) };
 }
 
 /** The likeliest date with those not told from it, the parameters on either side, and F at every date. */

@@ -71,13 +71,13 @@ export function check(fit: Fit, options: CheckOptions = {}): Check {
   });
   const named = (group: GroupCheck): string => (group.group === "" ? "" : `${group.group}: `);
   const sentence = groups.map((group) => `${named(group)}${group.sentence}`).join(" ");
-  return Object.freeze({
+  return {
     kind: "check",
     fit,
-    options: Object.freeze(settings),
-    groups: Object.freeze(groups),
+    options: settings,
+    groups,
     sentence,
-  });
+  };
 }
 
 function groupCheck(fit: Fit, group: GroupFit, refits: number, stream: RandomStream, tick: Tick): GroupCheck {
@@ -90,5 +90,5 @@ function groupCheck(fit: Fit, group: GroupFit, refits: number, stream: RandomStr
     errors: errorAdvice(fit, group, adviceDraws, stream, tick),
   };
   const concerns = concernsOf(fit, group, found);
-  return Object.freeze({ ...found, concerns, sentence: verdictOf(group, found, concerns) });
+  return { ...found, concerns, sentence: verdictOf(group, found, concerns) };
 }

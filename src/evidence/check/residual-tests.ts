@@ -40,7 +40,7 @@ function testsOfState(fit: Fit, group: GroupFit, state: string): ResidualTest[] 
   const residuals = points.map((point) => point.residual);
   const series = residualSeries(group, state);
   const lags = Math.max(1, Math.min(10, Math.floor(residuals.length / 5)));
-  const fitted = fit.options.errors === "process" ? 1 + fit.rule.memory.length : 0;
+  const fitted = fit.options.errors === "process" ? 1 + fit.rule.lags.length : 0;
   const log = fit.options.distribution === "lognormal";
   const levels = points.map((point) => (log ? Math.log(point.fitted) : point.fitted));
   const improved = ljungBox(series, lags, fitted);

@@ -64,16 +64,16 @@ export function compare(fits: readonly Fit[], options: CompareOptions = {}): Com
   const rolled = rollingOrigin(fits, planOf(first, options));
   const { verdict, standing, sentence } = comparisonVerdict(fits, rows, rolled);
   const decisions = decisionsOf(fits, standing, options.decide);
-  return Object.freeze({
+  return {
     kind: "comparison",
-    rows: Object.freeze(rows),
-    likelihoodRatios: Object.freeze(likelihoodRatios(fits)),
+    rows,
+    likelihoodRatios: likelihoodRatios(fits),
     rollingOrigin: rolled,
     verdict,
-    decisions: Object.freeze(decisions),
+    decisions,
     sentence: [sentence, ...decisionText(verdict, decisions)].join(" "),
-    notes: Object.freeze(notesOf(fits, scalesDiffer, rolled)),
-  });
+    notes: notesOf(fits, scalesDiffer, rolled),
+  };
 }
 
 function planOf(
@@ -92,7 +92,7 @@ function planOf(
 
 function refuseUnlike(first: Fit, other: Fit): void {
   if (first.options.errors !== other.options.errors) throw refuseUnlikeErrors();
-  const lags = first.rule.memory.length - other.rule.memory.length;
+  const lags = first.rule.lags.length - other.rule.lags.length;
   if (first.options.errors === "process" && lags !== 0 && first.groups[0]!.count !== other.groups[0]!.count)
     throw refuseUnlikeStarts(first.groups[0]!.count, other.groups[0]!.count);
   const same =

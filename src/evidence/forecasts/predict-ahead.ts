@@ -30,9 +30,9 @@ export function predictAhead(
   const last = trained.index[trained.index.length - 1]!;
   const unknowns = unknownsOf(rule, options);
   const parameters = Float64Array.from(rule.parameters, (name) => group.parameters[name]!);
-  const slots = rule.states.length + rule.memory.length;
+  const slots = rule.states.length + rule.lags.length;
   const steps = options.errors === "process";
-  const longest = rule.memory.reduce((most, { lag }) => Math.max(most, lag), 0);
+  const longest = rule.lags.reduce((most, { lag }) => Math.max(most, lag), 0);
   const start = steps ? lastValues(rule, trained) : unknowns.initial.slice();
   if (start === undefined) return undefined;
   group.estimates.forEach((estimate, i) => {
@@ -67,7 +67,7 @@ export function predictAhead(
 /** The state vector at the last row, past values included; undefined where one of them is not recorded. */
 function lastValues(rule: Rule, group: ObservedGroup): Float64Array | undefined {
   const last = group.index[group.index.length - 1]!;
-  const wanted = [...rule.states.map((state) => ({ state, lag: 0 })), ...rule.memory];
+  const wanted = [...rule.states.map((state) => ({ state, lag: 0 })), ...rule.lags];
   const values = wanted.map(
     ({ state, lag }) => group.values[state]![group.index.indexOf(last - lag)] ?? Number.NaN,
   );

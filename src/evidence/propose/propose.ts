@@ -140,7 +140,7 @@ function judged({ record, takenFrom, settings, tried, notTried, errors, seed, ti
     unread,
     assumedNormal: settings.distribution === undefined,
   });
-  return Object.freeze({ kind: "proposal", ...result, ...words });
+  return { kind: "proposal", ...result, ...words };
 }
 
 function rowOf(standing: Standing, heldOut: number | undefined, beatenBy: string | undefined): ProposedRule {

@@ -8,7 +8,7 @@ export interface StringComplaint {
 /** One offer to complete the word before the cursor. */
 export interface StringCompletion {
   readonly text: string;
-  /** What it is, in one word: "function", "constant", "rule". */
+  /** What it is, in one word: "function", "parameter", "rule". */
   readonly kind: string;
 }
 

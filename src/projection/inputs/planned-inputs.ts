@@ -1,4 +1,4 @@
-import { inputReach, type Rule } from "../../rule/index.js";
+import { inputOffsets, type Rule } from "../../rule/index.js";
 import { refuseFutureInput, refuseUnknownInput } from "../refusals.js";
 import { type InputPlan, type InputPlans, plannedValues } from "./input-plan.js";
 
@@ -22,7 +22,7 @@ export interface KnownInputs {
 export function plannedInputs(rule: Rule, plans: InputPlans, known: KnownInputs): readonly Float64Array[] {
   for (const name of Object.keys(plans))
     if (!rule.inputs.includes(name)) throw refuseUnknownInput(name, rule.inputs);
-  const reach = inputReach(rule);
+  const reach = inputOffsets(rule);
   const needed = (slot: number): number => Math.max(0, known.last + reach[slot]![1] - known.rows);
   const missing = rule.inputs.filter((name, slot) => needed(slot) > 0 && plans[name] === undefined);
   if (missing.length > 0) {

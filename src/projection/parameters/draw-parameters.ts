@@ -1,5 +1,4 @@
-import { choleskyFactor, type RandomStream } from "../../numeric/index.js";
-import { gammaDraw } from "../noise/gamma-draw.js";
+import { choleskyFactor, gammaDraw, type RandomStream } from "../../numeric/index.js";
 
 /**
  * Draws unknowns of a fit around their estimates; writes into `out`, and gives the drawn sigma as a multiple of the

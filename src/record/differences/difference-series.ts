@@ -57,7 +57,7 @@ export function differenceSeries(
   const change = next.map((value, i) => value - present[i]!);
   const perHead = change.map((value, i) => (present[i] === 0 ? Number.NaN : value / present[i]!));
   warnZero(group, state, pairs, present, warnings);
-  return Object.freeze({
+  return {
     group: group.name,
     state: state.name,
     index: Int32Array.from(pairs.earlier, (i) => group.index[i]!),
@@ -69,7 +69,7 @@ export function differenceSeries(
     ratio: next.map((value, i) => (present[i] === 0 ? Number.NaN : value / present[i]!)),
     perHead,
     difference: asked(plan, pairs, scaled, combined, perHead),
-  });
+  };
 }
 
 function asked(

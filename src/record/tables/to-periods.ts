@@ -1,8 +1,8 @@
 import { type ColumnTable, columnNamed } from "../column-table.js";
 import { numberColumn } from "../number-column.js";
 import type { StepLength } from "../observations.js";
-import type { CalendarName } from "../period/calendar.js";
-import { type PeriodAxis, periodAxis } from "../period/period-axis.js";
+import { type CalendarName, numberOfMoment } from "../period/calendar.js";
+import { type PlacedRows, placedRows } from "../period/placed-rows.js";
 import { optionWrong } from "../refusals.js";
 import { tableOfRows } from "../table-of-rows.js";
 import { type PeriodsOf, type PlacedSeries, placed } from "./placed-series.js";
@@ -23,10 +23,10 @@ export interface ToPeriodsOptions extends PeriodsOf {
  * @throws {ModelError} `missing-column` | `not-a-number` | `option-wrong`, and those of the period column.
  */
 export function toPeriods(record: ColumnTable, options: ToPeriodsOptions): ColumnTable {
-  const { table, axis, by, series } = placed(record, options);
-  const longer = periodAxis(table, options.period, options.to);
-  const { of } = axis.calendar.step;
-  if (!axis.isDated && longer.calendar.step.of !== of)
+  const { table, periods, by, series } = placed(record, options);
+  const longer = placedRows(table, options.period, options.to);
+  const { of } = periods.calendar.step;
+  if (periods.moments === undefined && longer.calendar.step.of !== of)
     throw optionWrong("to", options.to, `a number of ${of}, because the periods are numbers and not dates`);
   const taken = Object.entries(options.take).map(([name, take]) => ({
     name,
@@ -37,7 +37,8 @@ export function toPeriods(record: ColumnTable, options: ToPeriodsOptions): Colum
     const broken = brokenPeriods(own, longer);
     return Array.from(rowsByPeriod(own, longer), ([period, inside]) => ({
       ...Object.fromEntries(by.map((name) => [name, columnNamed(table, name, "a series")[inside[0]!]])),
-      [axis.column]: axis.isDated ? axis.written(inside[0]!) : axis.time[inside[0]!],
+      [periods.column]:
+        periods.moments === undefined ? periods.time[inside[0]!] : periods.written(inside[0]!),
       ...Object.fromEntries(
         taken.map(({ name, summary, values }) => [
           name,
@@ -50,24 +51,24 @@ export function toPeriods(record: ColumnTable, options: ToPeriodsOptions): Colum
   return tableOfRows(rows);
 }
 
-function rowsByPeriod({ rows }: PlacedSeries, longer: PeriodAxis): ReadonlyMap<number, readonly number[]> {
-  const periods = new Map<number, number[]>();
+function rowsByPeriod({ rows }: PlacedSeries, longer: PlacedRows): ReadonlyMap<number, readonly number[]> {
+  const inside = new Map<number, number[]>();
   for (const row of rows) {
     const period = Math.floor(longer.position[row]!);
-    periods.set(period, [...(periods.get(period) ?? []), row]);
+    inside.set(period, [...(inside.get(period) ?? []), row]);
   }
-  return periods;
+  return inside;
 }
 
 /** Longer periods in which a row of the series is missing: its moment lies evenly between its neighbours'. */
-function brokenPeriods({ rows, index }: PlacedSeries, longer: PeriodAxis): ReadonlySet<number> {
+function brokenPeriods({ rows, index }: PlacedSeries, longer: PlacedRows): ReadonlySet<number> {
   const broken = new Set<number>();
   const { moments, calendar, position } = longer;
   for (let i = 1; i < rows.length; i++) {
     const [before, after, steps] = [rows[i - 1]!, rows[i]!, index[i]! - index[i - 1]!];
     for (let step = 1; step < steps; step++) {
       const between = (of: Float64Array): number => of[before]! + ((of[after]! - of[before]!) * step) / steps;
-      const at = moments && calendar.ofDate ? calendar.ofDate(between(moments)) : between(position);
+      const at = moments ? numberOfMoment(calendar, between(moments))! : between(position);
       broken.add(Math.floor(at));
     }
   }

@@ -1,10 +1,19 @@
 import type { Rule } from "../rule.js";
-import { type NamedRuleOptions, named } from "./named.js";
+import { catalogueRule, type NamedRuleOptions } from "./catalogue-rule.js";
 import type { CatalogueEntry } from "./named-rule.js";
-import { aboveOne, capacity, fraction, growth, level, other, positive, pure } from "./quantities.js";
+import {
+  aboveOne,
+  carryingCapacity,
+  dimensionless,
+  fraction,
+  growthFactor,
+  level,
+  positive,
+  quantityWithUnit,
+} from "./quantities.js";
 
-const speed = other("largest growth rate", "1/hour");
-const stepLength = other("length of a period", "hour");
+const speed = quantityWithUnit("largest growth rate", "1/hour");
+const stepLength = quantityWithUnit("length of a period", "hour");
 
 const threePhase: CatalogueEntry = {
   name: "threePhase",
@@ -12,13 +21,13 @@ const threePhase: CatalogueEntry = {
   text: "x[t+1] = min(xmax, x + mu*max(0, min(h, (t + 1)*h - lag)))",
   source: "Buchanan, Whiting and Damert (1997), When is simple good enough, Food Microbiology 14, 313-326",
   quantities: {
-    x: pure("natural logarithm of the level"),
-    xmax: pure("logarithm of the highest level"),
+    x: dimensionless("natural logarithm of the level"),
+    xmax: dimensionless("logarithm of the highest level"),
     mu: speed,
     h: stepLength,
-    lag: other("time before growth begins", "hour"),
+    lag: quantityWithUnit("time before growth begins", "hour"),
   },
-  holds: ["mu > 0", "h > 0", "lag >= 0", "x0 <= xmax"],
+  validWhen: ["mu > 0", "h > 0", "lag >= 0", "x0 <= xmax"],
   bounds: { mu: positive, h: positive, lag: positive },
   equilibria: [],
   closedForms: [{ values: { x: "min(xmax, x0 + mu*max(0, t*h - lag))" } }],
@@ -33,12 +42,12 @@ const baranyi: CatalogueEntry = {
     "Baranyi and Roberts (1994), A dynamic approach to predicting bacterial growth, Int. J. Food Microbiol. 23, 277-294, stepped",
   quantities: {
     N: level,
-    q: pure("physiological readiness; lag = log(1 + 1/q0)/mu"),
+    q: dimensionless("physiological readiness; lag = log(1 + 1/q0)/mu"),
     mu: speed,
     h: stepLength,
-    K: capacity,
+    K: carryingCapacity,
   },
-  holds: ["mu > 0", "h > 0", "K > 0", "q0 > 0", "N0 >= 0"],
+  validWhen: ["mu > 0", "h > 0", "K > 0", "q0 > 0", "N0 >= 0"],
   bounds: { mu: positive, h: positive, K: positive, q: positive, N: positive },
   equilibria: [],
   closedForms: [{ values: { q: "q0*exp(mu*h*t)" } }],
@@ -52,13 +61,13 @@ const resource: CatalogueEntry = {
   source: "Monod (1949), The growth of bacterial cultures, Ann. Rev. Microbiol. 3, 371-394, stepped",
   quantities: {
     N: level,
-    S: other("resource left", "mass"),
+    S: quantityWithUnit("resource left", "mass"),
     mu: speed,
     h: stepLength,
-    Ks: other("resource at half speed", "mass"),
-    Y: pure("yield, mass for mass"),
+    Ks: quantityWithUnit("resource at half speed", "mass"),
+    Y: dimensionless("yield, mass for mass"),
   },
-  holds: ["mu > 0", "h > 0", "Ks > 0", "Y > 0", "N0 >= 0", "S0 >= 0", "h*mu*N0 <= Y*(Ks + S0)"],
+  validWhen: ["mu > 0", "h > 0", "Ks > 0", "Y > 0", "N0 >= 0", "S0 >= 0", "h*mu*N0 <= Y*(Ks + S0)"],
   bounds: { mu: positive, h: positive, Ks: positive, Y: positive, N: positive, S: positive },
   equilibria: [],
   closedForms: [],
@@ -71,8 +80,13 @@ const chemostat: CatalogueEntry = {
   title: "Continuous culture in steps: Beverton-Holt growth, then dilution",
   text: "N[t+1] = (1 - d)*R*N/(1 + (R - 1)*N/K)",
   source: "common practice, no source",
-  quantities: { N: level, d: pure("share replaced in a period"), R: growth, K: capacity },
-  holds: ["R > 1", "K > 0", "d >= 0 and d < 1", "N0 >= 0"],
+  quantities: {
+    N: level,
+    d: dimensionless("share replaced in a period"),
+    R: growthFactor,
+    K: carryingCapacity,
+  },
+  validWhen: ["R > 1", "K > 0", "d >= 0 and d < 1", "N0 >= 0"],
   bounds: { R: aboveOne, K: positive, d: fraction, N: positive },
   start: { R: 1.5, d: 0.1 },
   equilibria: [
@@ -96,11 +110,11 @@ const transfer: CatalogueEntry = {
   source: "common practice, no source",
   quantities: {
     N: level,
-    G: pure("multiplier between transfers at low level, R^(T/h)"),
-    D: pure("dilution factor of a transfer"),
-    K: capacity,
+    G: dimensionless("multiplier between transfers at low level, R^(T/h)"),
+    D: dimensionless("dilution factor of a transfer"),
+    K: carryingCapacity,
   },
-  holds: ["G > 1", "D >= 1", "K > 0", "N0 >= 0"],
+  validWhen: ["G > 1", "D >= 1", "K > 0", "N0 >= 0"],
   bounds: { G: aboveOne, D: aboveOne, K: positive, N: positive },
   start: { G: 20, D: 10 },
   equilibria: [
@@ -117,12 +131,12 @@ const transfer: CatalogueEntry = {
 };
 
 /** x' = min(xmax, x + mu (time of the period after the lag)). */
-export const threePhaseRule = (options?: NamedRuleOptions): Rule => named(threePhase, options);
+export const threePhaseRule = (options?: NamedRuleOptions): Rule => catalogueRule(threePhase, options);
 /** q' = q e^(mu h), N' = N exp(log((1 + q')/(1 + q))(1 - N/K)). */
-export const baranyiRule = (options?: NamedRuleOptions): Rule => named(baranyi, options);
+export const baranyiRule = (options?: NamedRuleOptions): Rule => catalogueRule(baranyi, options);
 /** N' = N + h mu S/(Ks + S) N, S' = S - (N' - N)/Y. */
-export const resourceRule = (options?: NamedRuleOptions): Rule => named(resource, options);
+export const resourceRule = (options?: NamedRuleOptions): Rule => catalogueRule(resource, options);
 /** N' = (1 - d) R N/(1 + (R - 1) N/K). */
-export const chemostatRule = (options?: NamedRuleOptions): Rule => named(chemostat, options);
+export const chemostatRule = (options?: NamedRuleOptions): Rule => catalogueRule(chemostat, options);
 /** N' = F(N/D), F Beverton-Holt with multiplier G. */
-export const transferRule = (options?: NamedRuleOptions): Rule => named(transfer, options);
+export const transferRule = (options?: NamedRuleOptions): Rule => catalogueRule(transfer, options);

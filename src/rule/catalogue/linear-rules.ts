@@ -1,15 +1,15 @@
 import type { Rule } from "../rule.js";
-import { type NamedRuleOptions, named } from "./named.js";
+import { catalogueRule, type NamedRuleOptions } from "./catalogue-rule.js";
 import type { CatalogueEntry } from "./named-rule.js";
-import { growth, inLevels, level, positive, pure } from "./quantities.js";
+import { dimensionless, growthFactor, inStateUnit, level, positive } from "./quantities.js";
 
 const constantChange: CatalogueEntry = {
   name: "constantChange",
   title: "Constant change",
   text: "x[t+1] = x + c",
   source: "common practice, no source",
-  quantities: { x: level, c: inLevels("change a period") },
-  holds: [],
+  quantities: { x: level, c: inStateUnit("change a period") },
+  validWhen: [],
   equilibria: [],
   closedForms: [{ values: { x: "x0 + c*t" } }],
   remarks: "It stays nowhere unless c = 0, and then everywhere.",
@@ -20,8 +20,8 @@ const geometric: CatalogueEntry = {
   title: "Geometric growth or decline",
   text: "x[t+1] = R*x",
   source: "Malthus (1798), An Essay on the Principle of Population",
-  quantities: { x: level, R: growth },
-  holds: ["R > 0"],
+  quantities: { x: level, R: growthFactor },
+  validWhen: ["R > 0"],
   bounds: { R: positive },
   start: { R: 1.1 },
   equilibria: [{ at: { x: "0" }, multiplier: "R" }],
@@ -36,10 +36,10 @@ const affine: CatalogueEntry = {
   source: "common practice, no source",
   quantities: {
     x: level,
-    a: pure("share kept, or one plus the interest of a period"),
-    b: inLevels("amount added a period"),
+    a: dimensionless("share kept, or one plus the interest of a period"),
+    b: inStateUnit("amount added a period"),
   },
-  holds: [],
+  validWhen: [],
   start: { a: 1 },
   equilibria: [{ at: { x: "b/(1 - a)" }, multiplier: "a", when: "a != 1" }],
   closedForms: [
@@ -57,10 +57,10 @@ const dosing: CatalogueEntry = {
   source: "common practice, no source",
   quantities: {
     M: level,
-    rho: pure("share left after one interval, 2^(-interval/half-life)"),
-    D: inLevels("dose"),
+    rho: dimensionless("share left after one interval, 2^(-interval/half-life)"),
+    D: inStateUnit("dose"),
   },
-  holds: ["rho > 0 and rho < 1"],
+  validWhen: ["rho > 0 and rho < 1"],
   bounds: { rho: [0, 1], D: positive },
   start: { rho: 0.5 },
   equilibria: [{ at: { M: "D/(1 - rho)" }, multiplier: "rho" }],
@@ -77,24 +77,25 @@ const driven: CatalogueEntry = {
   inputs: ["u"],
   quantities: {
     x: level,
-    a: pure("share kept"),
-    b: inLevels("amount added a period"),
-    c: inLevels("effect of one unit of the driver"),
-    u: pure("driver of the period"),
+    a: dimensionless("share kept"),
+    b: inStateUnit("amount added a period"),
+    c: inStateUnit("effect of one unit of the driver"),
+    u: dimensionless("driver of the period"),
   },
-  holds: [],
+  validWhen: [],
   equilibria: [{ at: { x: "(b + c*u)/(1 - a)" }, multiplier: "a", when: "a != 1" }],
   closedForms: [],
   remarks: "A projection needs the driver's future values: give them as scenarios.",
 };
 
 /** x' = x + c. */
-export const constantChangeRule = (options?: NamedRuleOptions): Rule => named(constantChange, options);
+export const constantChangeRule = (options?: NamedRuleOptions): Rule =>
+  catalogueRule(constantChange, options);
 /** x' = R x. */
-export const geometricRule = (options?: NamedRuleOptions): Rule => named(geometric, options);
+export const geometricRule = (options?: NamedRuleOptions): Rule => catalogueRule(geometric, options);
 /** x' = a x + b. */
-export const affineRule = (options?: NamedRuleOptions): Rule => named(affine, options);
+export const affineRule = (options?: NamedRuleOptions): Rule => catalogueRule(affine, options);
 /** M' = rho M + D. */
-export const dosingRule = (options?: NamedRuleOptions): Rule => named(dosing, options);
+export const dosingRule = (options?: NamedRuleOptions): Rule => catalogueRule(dosing, options);
 /** x' = a x + b + c u, u an input. */
-export const drivenRule = (options?: NamedRuleOptions): Rule => named(driven, options);
+export const drivenRule = (options?: NamedRuleOptions): Rule => catalogueRule(driven, options);

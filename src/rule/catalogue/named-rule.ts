@@ -33,9 +33,9 @@ export interface NamedRule {
   readonly source: string;
   readonly quantities: Readonly<Record<string, NamedQuantity>>;
   /** Parameters that a record often holds as a column of its own, as a catch: they become inputs when said so. */
-  readonly mayBeInput?: readonly string[];
+  readonly optionalInputs?: readonly string[];
   /** Conditions under which the rule means what it says; outside them results are refused. */
-  readonly holds: readonly string[];
+  readonly validWhen: readonly string[];
   readonly equilibria: readonly NamedEquilibrium[];
   readonly closedForms: readonly NamedClosedForm[];
   /** What practice and mathematics say of its stability and use. */

@@ -1,16 +1,16 @@
 import type { Rule } from "../rule.js";
-import { type NamedRuleOptions, named } from "./named.js";
+import { catalogueRule, type NamedRuleOptions } from "./catalogue-rule.js";
 import type { CatalogueEntry, NamedQuantity } from "./named-rule.js";
-import { fraction, inLevels, level, positive, pure } from "./quantities.js";
+import { dimensionless, fraction, inStateUnit, level, positive } from "./quantities.js";
 
-const upTo = (count: number): readonly number[] => Array.from({ length: count }, (_, i) => i + 1);
+const oneTo = (count: number): readonly number[] => Array.from({ length: count }, (_, i) => i + 1);
 
 function record<T>(names: readonly string[], value: T): Record<string, T> {
   return Object.fromEntries(names.map((name) => [name, value]));
 }
 
 function ages(count: number): CatalogueEntry {
-  const all = upTo(count);
+  const all = oneTo(count);
   const births = all.map((k) => `f${k}*n${k}`).join(" + ");
   const later = all.slice(1).map((k) => `n${k}[t+1] = s${k - 1}*n${k - 1}`);
   const survivals = all.slice(1).map((k) => `s${k - 1}`);
@@ -25,10 +25,10 @@ function ages(count: number): CatalogueEntry {
         all.map((k) => `n${k}`),
         level,
       ),
-      ...record(fertilities, pure("young a period from one of that age")),
-      ...record(survivals, pure("share that lives on to the next age")),
+      ...record(fertilities, dimensionless("young a period from one of that age")),
+      ...record(survivals, dimensionless("share that lives on to the next age")),
     },
-    holds: [
+    validWhen: [
       ...fertilities.map((name) => `${name} >= 0`),
       ...survivals.map((name) => `${name} >= 0 and ${name} <= 1`),
     ],
@@ -69,10 +69,10 @@ function stages({ stages: names, moves }: StageOption): CatalogueEntry {
     quantities: {
       ...record<NamedQuantity>(names, level),
       ...Object.fromEntries(
-        all.map(([from, to]) => [share(from, to), pure(`share of ${from} that moves to ${to}`)]),
+        all.map(([from, to]) => [share(from, to), dimensionless(`share of ${from} that moves to ${to}`)]),
       ),
     },
-    holds: shares.map((name) => `${name} >= 0`),
+    validWhen: shares.map((name) => `${name} >= 0`),
     bounds: record(shares, positive),
     equilibria: [],
     closedForms: [],
@@ -82,13 +82,13 @@ function stages({ stages: names, moves }: StageOption): CatalogueEntry {
 }
 
 /** How long goods last, and which are given out first. */
-export interface ShelfOption {
+export interface PerishableOption {
   readonly life: number;
   readonly issue?: "oldest-first" | "newest-first";
 }
 
-function shelf(life: number, issue: "oldest-first" | "newest-first"): CatalogueEntry {
-  const all = upTo(life);
+function perishable(life: number, issue: "oldest-first" | "newest-first"): CatalogueEntry {
+  const all = oneTo(life);
   const order = issue === "oldest-first" ? [...all].reverse() : all;
   const used = order.map((k, i) => {
     const left = ["d", ...order.slice(0, i).map((done) => `used${done}`)].join(" - ");
@@ -109,10 +109,10 @@ function shelf(life: number, issue: "oldest-first" | "newest-first"): CatalogueE
         all.map((k) => `a${k}`),
         level,
       ),
-      q: inLevels("received at the end of the period"),
-      d: inLevels("demand of the period"),
+      q: inStateUnit("received at the end of the period"),
+      d: inStateUnit("demand of the period"),
     },
-    holds: all.map((k) => `a${k}0 >= 0`),
+    validWhen: all.map((k) => `a${k}0 >= 0`),
     bounds: record(
       all.map((k) => `a${k}`),
       positive,
@@ -126,13 +126,13 @@ function shelf(life: number, issue: "oldest-first" | "newest-first"): CatalogueE
 
 /** n1' = f1 n1 + f2 n2 + ..., n2' = s1 n1, ... */
 export const agesRule = ({ ages: count, ...options }: NamedRuleOptions & { readonly ages: number }): Rule =>
-  named(ages(count), options);
+  catalogueRule(ages(count), options);
 /** v' = P v, one share p_from_to a move. */
 export const stagesRule = ({ stages: names, moves, ...options }: NamedRuleOptions & StageOption): Rule =>
-  named(stages(moves === undefined ? { stages: names } : { stages: names, moves }), options);
+  catalogueRule(stages(moves === undefined ? { stages: names } : { stages: names, moves }), options);
 /** Age classes a1 (newest) to the oldest, receipts q, demand d. */
 export const perishableRule = ({
   life,
   issue = "oldest-first",
   ...options
-}: NamedRuleOptions & ShelfOption): Rule => named(shelf(life, issue), options);
+}: NamedRuleOptions & PerishableOption): Rule => catalogueRule(perishable(life, issue), options);

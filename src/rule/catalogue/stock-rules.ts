@@ -1,8 +1,8 @@
 import type { Rule } from "../rule.js";
-import { type DelayOption, past } from "./delay.js";
-import { type NamedRuleOptions, named } from "./named.js";
+import { catalogueRule, type NamedRuleOptions } from "./catalogue-rule.js";
+import { type LagOption, lagged } from "./lag.js";
 import type { CatalogueEntry } from "./named-rule.js";
-import { fraction, inLevels, level, positive, pure } from "./quantities.js";
+import { dimensionless, fraction, inStateUnit, level, positive } from "./quantities.js";
 
 const smoothing: CatalogueEntry = {
   name: "smoothing",
@@ -10,8 +10,12 @@ const smoothing: CatalogueEntry = {
   text: "f[t+1] = f + alpha*(d - f)",
   source: "Brown (1959), Statistical Forecasting for Inventory Control",
   inputs: ["d"],
-  quantities: { f: level, alpha: pure("weight of the newest demand"), d: inLevels("demand of the period") },
-  holds: ["alpha > 0", "alpha <= 1"],
+  quantities: {
+    f: level,
+    alpha: dimensionless("weight of the newest demand"),
+    d: inStateUnit("demand of the period"),
+  },
+  validWhen: ["alpha > 0", "alpha <= 1"],
   bounds: { alpha: fraction },
   start: { alpha: 0.2 },
   equilibria: [{ at: { f: "d" }, multiplier: "1 - alpha" }],
@@ -29,12 +33,12 @@ const trend: CatalogueEntry = {
   inputs: ["x"],
   quantities: {
     l: level,
-    b: inLevels("trend a period"),
-    a: pure("weight of the newest value"),
-    g: pure("weight of the newest trend"),
-    x: inLevels("recorded value"),
+    b: inStateUnit("trend a period"),
+    a: dimensionless("weight of the newest value"),
+    g: dimensionless("weight of the newest trend"),
+    x: inStateUnit("recorded value"),
   },
-  holds: ["a > 0 and a < 1", "g > 0 and g < 1"],
+  validWhen: ["a > 0 and a < 1", "g > 0 and g < 1"],
   bounds: { a: fraction, g: fraction },
   start: { a: 0.3, g: 0.1 },
   equilibria: [{ at: { l: "x", b: "0" } }],
@@ -49,13 +53,13 @@ const croston: CatalogueEntry = {
   source: "Croston (1972), Forecasting and stock control for intermittent demands, Oper. Res. Q. 23, 289-303",
   inputs: ["x"],
   quantities: {
-    z: inLevels("size of a demand"),
-    p: pure("periods between demands"),
-    q: pure("periods since the last demand"),
-    a: pure("weight of the newest demand"),
-    x: inLevels("demand of the period"),
+    z: inStateUnit("size of a demand"),
+    p: dimensionless("periods between demands"),
+    q: dimensionless("periods since the last demand"),
+    a: dimensionless("weight of the newest demand"),
+    x: inStateUnit("demand of the period"),
   },
-  holds: ["a > 0 and a <= 1", "p0 > 0", "q0 >= 1"],
+  validWhen: ["a > 0 and a <= 1", "p0 > 0", "q0 >= 1"],
   bounds: { a: fraction },
   start: { a: 0.1 },
   equilibria: [],
@@ -67,11 +71,15 @@ const croston: CatalogueEntry = {
 const inventory = (lag: number): CatalogueEntry => ({
   name: "inventory",
   title: `Inventory balance, orders arriving after ${lag} periods`,
-  text: `I[t+1] = I + ${past("q", lag)} - d`,
+  text: `I[t+1] = I + ${lagged("q", lag)} - d`,
   source: "common practice, no source",
   inputs: ["q", "d"],
-  quantities: { I: level, q: inLevels("order placed in the period"), d: inLevels("demand of the period") },
-  holds: [],
+  quantities: {
+    I: level,
+    q: inStateUnit("order placed in the period"),
+    d: inStateUnit("demand of the period"),
+  },
+  validWhen: [],
   equilibria: [],
   closedForms: [],
   remarks: "It adds up and does not correct itself (slope 1): feedback comes from the order policy.",
@@ -80,10 +88,14 @@ const inventory = (lag: number): CatalogueEntry => ({
 const gapCorrection = (lag: number): CatalogueEntry => ({
   name: "gapCorrection",
   title: `Stock under an order policy that corrects a share of the gap, ${lag} periods late`,
-  text: `I[t+1] = I + beta*(target - ${past("I", lag)})`,
+  text: `I[t+1] = I + beta*(target - ${lagged("I", lag)})`,
   source: "Jury conditions for z^(L+1) - z^L + beta = 0; common practice, no source",
-  quantities: { I: level, beta: pure("share of the gap ordered"), target: inLevels("level aimed at") },
-  holds: ["beta > 0"],
+  quantities: {
+    I: level,
+    beta: dimensionless("share of the gap ordered"),
+    target: inStateUnit("level aimed at"),
+  },
+  validWhen: ["beta > 0"],
   bounds: { beta: positive },
   start: { beta: 0.3 },
   equilibria: [{ at: { I: "target" }, ...(lag === 0 ? { multiplier: "1 - beta" } : {}) }],
@@ -92,14 +104,14 @@ const gapCorrection = (lag: number): CatalogueEntry => ({
 });
 
 /** f' = f + alpha (d - f), d an input. */
-export const smoothingRule = (options?: NamedRuleOptions): Rule => named(smoothing, options);
+export const smoothingRule = (options?: NamedRuleOptions): Rule => catalogueRule(smoothing, options);
 /** l' = a x + (1 - a)(l + b), b' = g (l' - l) + (1 - g) b. */
-export const levelAndTrendRule = (options?: NamedRuleOptions): Rule => named(trend, options);
+export const levelAndTrendRule = (options?: NamedRuleOptions): Rule => catalogueRule(trend, options);
 /** Size z and gap p, updated where there is a demand. */
-export const sporadicDemandRule = (options?: NamedRuleOptions): Rule => named(croston, options);
+export const sporadicDemandRule = (options?: NamedRuleOptions): Rule => catalogueRule(croston, options);
 /** I' = I + q[t-lag] - d, q and d inputs. */
-export const inventoryRule = ({ lag, ...options }: NamedRuleOptions & DelayOption): Rule =>
-  named(inventory(lag), options);
+export const inventoryRule = ({ lag, ...options }: NamedRuleOptions & LagOption): Rule =>
+  catalogueRule(inventory(lag), options);
 /** I' = I + beta (target - I[t-lag]): demand is replaced and a share of the gap ordered. */
-export const gapCorrectionRule = ({ lag, ...options }: NamedRuleOptions & DelayOption): Rule =>
-  named(gapCorrection(lag), options);
+export const gapCorrectionRule = ({ lag, ...options }: NamedRuleOptions & LagOption): Rule =>
+  catalogueRule(gapCorrection(lag), options);

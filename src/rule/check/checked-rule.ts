@@ -15,7 +15,7 @@ export interface CheckedRule {
 }
 
 /** What the analyst declared beside the text. */
-export interface Declared {
+export interface Declarations {
   /** Absent: every free name is a parameter. */
   readonly parameters?: readonly string[] | undefined;
   readonly inputs: readonly string[];

@@ -4,7 +4,7 @@ import { ruleDefinition } from "../rule-definition.js";
 import { generateRule } from "./generate-rule.js";
 import { interpretGraph } from "./interpret-graph.js";
 
-const compiled = new WeakMap<Rule, CompiledRule>();
+const cache = new WeakMap<Rule, CompiledRule>();
 
 /** Whether this place allows functions to be made from source; some hosts forbid it. */
 function allowsGeneratedCode(): boolean {
@@ -27,10 +27,10 @@ function allowsGeneratedCode(): boolean {
  * @example const { step } = compileRule(recurrence("N[t+1] = R*N"));
  */
 export function compileRule(rule: Rule): CompiledRule {
-  let found = compiled.get(rule);
+  let found = cache.get(rule);
   if (found === undefined) {
     found = allowsGeneratedCode() ? generateRule(ruleDefinition(rule).graph) : interpretRule(rule);
-    compiled.set(rule, found);
+    cache.set(rule, found);
   }
   return found;
 }

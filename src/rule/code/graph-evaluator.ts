@@ -31,7 +31,7 @@ export function graphEvaluator(roots: readonly Node[]): (place: Place) => ReadNo
       if (node.kind === "number") tape[index] = node.value;
       else if (node.kind === "leaf") tape[index] = leafValue(node, place);
       else {
-        const [a, b = a!, c = a!] = node.inside;
+        const [a, b = a!, c = a!] = node.args;
         tape[index] = operations[node.operator].value(read(a!), read(b), read(c));
       }
     });

@@ -1,5 +1,5 @@
 import type { RuleGraph } from "../graph/rule-graph.js";
-import { stepDerivatives } from "../graph/step-derivatives.js";
+import { stepJacobian } from "../graph/step-jacobian.js";
 import { type EmittedProgram, emitProgram } from "./emit-program.js";
 import { sensitivityPattern } from "./sensitivity-pattern.js";
 
@@ -30,7 +30,7 @@ function nextLine(
   program: EmittedProgram,
   { slot, unknown }: SensitivityCell,
 ): string {
-  const { byState, byParameter } = stepDerivatives(rule);
+  const { byState, byParameter } = stepJacobian(rule);
   const slopes = byState[slot]!.map(program.read);
   const terms = slopes.flatMap((slope, k) => {
     if (slope === "0" || !pattern[k]![unknown]) return [];
@@ -43,7 +43,7 @@ function nextLine(
 
 /** Recurrence of the sensitivities: d x' / d p = sum over states (d f / d x)(d x / d p) + d f / d p. */
 export function sensitivityParts(rule: RuleGraph): SensitivityParts {
-  const { byState, byParameter } = stepDerivatives(rule);
+  const { byState, byParameter } = stepJacobian(rule);
   const program = emitProgram([...rule.next, ...byState.flat(), ...byParameter.flat()]);
   const pattern = sensitivityPattern(rule);
   const unknowns = rule.parameters + rule.states;

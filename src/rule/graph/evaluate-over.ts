@@ -17,7 +17,7 @@ export function evaluatorOver<T>(
   const ordered = graphOrder(roots);
   const place = new Map(ordered.map((node, index) => [node, index]));
   const insides = ordered.map((node) =>
-    node.kind === "inner" ? node.inside.map((part) => place.get(part)!) : [],
+    node.kind === "inner" ? node.args.map((part) => place.get(part)!) : [],
   );
   const tape: T[] = new Array(ordered.length);
   return (leafValue) => {

@@ -5,7 +5,7 @@ export function graphOrder(roots: readonly Node[]): readonly Node[] {
   const ordered = new Set<Node>();
   const visit = (node: Node): void => {
     if (ordered.has(node)) return;
-    if (node.kind === "inner") node.inside.forEach(visit);
+    if (node.kind === "inner") node.args.forEach(visit);
     ordered.add(node);
   };
   roots.forEach(visit);

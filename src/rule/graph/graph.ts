@@ -16,7 +16,7 @@ const isNumber = (node: Node | undefined, value: number): boolean =>
   node?.kind === "number" && node.value === value;
 
 /** The number that leaves the other argument as it is. */
-const rightUnits: Partial<Readonly<Record<Operator, number>>> = {
+const identityElements: Partial<Readonly<Record<Operator, number>>> = {
   add: 0,
   subtract: 0,
   multiply: 1,
@@ -25,26 +25,26 @@ const rightUnits: Partial<Readonly<Record<Operator, number>>> = {
 };
 
 /** The argument that the result is equal to in value, if there is one. */
-function alreadyMade(operator: Operator, a: Node, b: Node | undefined): Node | undefined {
-  if (operator === "negate") return a.kind === "inner" && a.operator === "negate" ? a.inside[0] : undefined;
-  const unit = rightUnits[operator];
+function simplified(operator: Operator, a: Node, b: Node | undefined): Node | undefined {
+  if (operator === "negate") return a.kind === "inner" && a.operator === "negate" ? a.args[0] : undefined;
+  const unit = identityElements[operator];
   if (unit === undefined) return undefined;
   if (isNumber(b, unit)) return a;
   return commutative.has(operator) && isNumber(a, unit) ? b : undefined;
 }
 
 export function createGraph(): Graph {
-  const made = new Map<string, Node>();
-  const once = (key: string, make: (id: number) => Node): Node => {
-    let node = made.get(key);
+  const interned = new Map<string, Node>();
+  const intern = (key: string, make: (id: number) => Node): Node => {
+    let node = interned.get(key);
     if (node === undefined) {
-      node = make(made.size);
-      made.set(key, node);
+      node = make(interned.size);
+      interned.set(key, node);
     }
     return node;
   };
   const number = (value: number): Node =>
-    once(`#${Object.is(value, -0) ? "-0" : value}`, (id) => ({ kind: "number", id, value }));
+    intern(`#${Object.is(value, -0) ? "-0" : value}`, (id) => ({ kind: "number", id, value }));
   const apply = (operator: Operator, ...given: readonly Node[]): Node => {
     const [a, b, c] = given;
     if (given.every((node) => node.kind === "number")) {
@@ -52,17 +52,17 @@ export function createGraph(): Graph {
       return number(operations[operator].value(x, y, z));
     }
     if (operator === "choose" && a!.kind === "number") return a!.value === 1 ? b! : c!;
-    const same = alreadyMade(operator, a!, b);
+    const same = simplified(operator, a!, b);
     if (same !== undefined) return same;
     const inside = commutative.has(operator) ? [...given].sort((p, q) => p.id - q.id) : given;
     const key = `${operator}(${inside.map((node) => node.id).join()})`;
-    return once(key, (id) => ({ kind: "inner", id, operator, inside }));
+    return intern(key, (id) => ({ kind: "inner", id, operator, args: inside }));
   };
   return {
     number,
     leaf: (role, slot, offset = 0) =>
-      once(`${role}[${slot}]${offset}`, (id) => ({ kind: "leaf", id, role, slot, offset })),
+      intern(`${role}[${slot}]${offset}`, (id) => ({ kind: "leaf", id, role, slot, offset })),
     apply,
-    size: () => made.size,
+    size: () => interned.size,
   };
 }

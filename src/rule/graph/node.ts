@@ -50,5 +50,5 @@ export type Node =
       readonly kind: "inner";
       readonly id: number;
       readonly operator: Operator;
-      readonly inside: readonly Node[];
+      readonly args: readonly Node[];
     };

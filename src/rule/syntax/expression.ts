@@ -28,7 +28,7 @@ export type Expression =
       readonly left: Expression;
       readonly right: Expression;
     })
-  | (Span & { readonly kind: "call"; readonly name: string; readonly inside: readonly Expression[] });
+  | (Span & { readonly kind: "call"; readonly name: string; readonly args: readonly Expression[] });
 
 /** One line of a rule: the next value of a state, its change, or a named quantity inside the period. */
 export interface Statement extends Span {

@@ -1,4 +1,4 @@
-import { refuse } from "../refusals.js";
+import { ruleError } from "../errors.js";
 import type { Token } from "./token.js";
 import type { TokenReader } from "./token-reader.js";
 
@@ -11,7 +11,7 @@ export function parseOffset(reader: TokenReader, name: Token): { offset: number;
   const index = reader.take();
   if (index.kind !== "name" || index.text !== "t") {
     const wrong = `The period of "${name.text}" must be counted from t.`;
-    throw refuse("unreadable-period", reader.text, { start: open.start, end: index.end }, wrong, form);
+    throw ruleError("unreadable-period", reader.text, { start: open.start, end: index.end }, wrong, form);
   }
   const offset = parseSteps(reader, name);
   const close = reader.expect("]", form);
@@ -23,7 +23,7 @@ function parseSteps(reader: TokenReader, name: Token): number {
   if (direction === 0) return 0;
   const steps = reader.take();
   if (steps.kind === "number" && /^\d{1,6}$/u.test(steps.text)) return direction * Number(steps.text) + 0;
-  throw refuse(
+  throw ruleError(
     "unreadable-period",
     reader.text,
     steps,

@@ -1,10 +1,10 @@
+import { ruleError, unknownFunctionError } from "../errors.js";
 import { ruleFunction, ruleFunctions } from "../functions.js";
-import { notAFunction, refuse } from "../refusals.js";
 import type { Expression } from "./expression.js";
 import { parseOffset } from "./parse-offset.js";
-import { notStrength, unaryMinusStrength } from "./strengths.js";
+import { notPrecedence, unaryMinusPrecedence } from "./precedence.js";
 import type { Token } from "./token.js";
-import { before, type TokenReader } from "./token-reader.js";
+import { placeBefore, type TokenReader } from "./token-reader.js";
 
 /** How a nested expression is read; handed in, because an expression is made of operands. */
 type ReadExpression = (reader: TokenReader, least?: number) => Expression;
@@ -17,12 +17,12 @@ export function parseOperand(reader: TokenReader, read: ReadExpression): Express
   if (token.kind === "name") return token.text === "not" ? parseUnary(reader, read) : parseName(reader, read);
   if (token.text === "-") return parseUnary(reader, read);
   if (token.text === "(") return parseGroup(reader, read);
-  throw missingValue(reader, token);
+  throw missingValueError(reader, token);
 }
 
-function missingValue(reader: TokenReader, token: Token): Error {
+function missingValueError(reader: TokenReader, token: Token): Error {
   if (token.text === "Δ") {
-    return refuse(
+    return ruleError(
       "misplaced-change",
       reader.text,
       token,
@@ -36,14 +36,14 @@ function missingValue(reader: TokenReader, token: Token): Error {
       : token.text === "="
         ? "Write == to compare."
         : "Write a number, a name, a function or a bracket there.";
-  return refuse("missing-value", reader.text, token, `A value is missing ${before(token)}.`, remedy);
+  return ruleError("missing-value", reader.text, token, `A value is missing ${placeBefore(token)}.`, remedy);
 }
 
 function parseNumber(reader: TokenReader): Expression {
   const { text, start, end } = reader.take();
   const value = Number(text);
   if (Number.isFinite(value)) return { kind: "number", value, start, end };
-  throw refuse(
+  throw ruleError(
     "number-too-large",
     reader.text,
     { start, end },
@@ -55,7 +55,7 @@ function parseNumber(reader: TokenReader): Expression {
 function parseUnary(reader: TokenReader, read: ReadExpression): Expression {
   const sign = reader.take();
   const operator = sign.text === "not" ? "not" : "-";
-  const operand = read(reader, operator === "not" ? notStrength : unaryMinusStrength);
+  const operand = read(reader, operator === "not" ? notPrecedence : unaryMinusPrecedence);
   return { kind: "unary", operator, operand, start: sign.start, end: operand.end };
 }
 
@@ -77,7 +77,7 @@ function parseName(reader: TokenReader, read: ReadExpression): Expression {
   const name = reader.take();
   if (reader.peek().text === "(" && reader.peek().kind === "sign") return parseCall(reader, read, name);
   if (name.text === "and" || name.text === "or") {
-    throw refuse(
+    throw ruleError(
       "missing-value",
       reader.text,
       name,
@@ -87,7 +87,7 @@ function parseName(reader: TokenReader, read: ReadExpression): Expression {
   }
   const found = ruleFunction(name.text);
   if (found !== undefined) {
-    throw refuse(
+    throw ruleError(
       "function-without-brackets",
       reader.text,
       name,
@@ -103,7 +103,7 @@ function parseCall(reader: TokenReader, read: ReadExpression, name: Token): Expr
   const open = reader.take();
   if (ruleFunction(name.text) === undefined) {
     const place = { start: name.start, end: open.end };
-    throw notAFunction(
+    throw unknownFunctionError(
       reader.text,
       place,
       name.text,
@@ -121,5 +121,5 @@ function parseCall(reader: TokenReader, read: ReadExpression, name: Token): Expr
     reader.expect(")", `Close the bracket of ${name.text}( after its last value.`);
   }
   const end = reader.peek(-1).end;
-  return { kind: "call", name: name.text, inside, start: name.start, end };
+  return { kind: "call", name: name.text, args: inside, start: name.start, end };
 }

@@ -1,9 +1,9 @@
+import { ruleError } from "../errors.js";
 import { reservedWords } from "../functions.js";
-import { refuse } from "../refusals.js";
 import type { Statement } from "./expression.js";
 import { parseExpression } from "./parse-expression.js";
 import { parseOffset } from "./parse-offset.js";
-import { joiningStrength } from "./strengths.js";
+import { binaryPrecedence } from "./precedence.js";
 import type { Token } from "./token.js";
 import { type TokenReader, tokenReader } from "./token-reader.js";
 
@@ -18,7 +18,7 @@ function takeName(reader: TokenReader): Token {
     name.kind === "name"
       ? `"${name.text}" has a meaning of its own and cannot be set.`
       : "A line must begin with the name of what it sets.";
-  throw refuse("unreadable-line", reader.text, name, wrong, forms);
+  throw ruleError("unreadable-line", reader.text, name, wrong, forms);
 }
 
 function parseTarget(reader: TokenReader): Target {
@@ -39,15 +39,15 @@ function parseTarget(reader: TokenReader): Target {
   if (bracket.text !== "[") return { kind: "quantity", name: name.text, nameAt: name };
   if (offset === 1) return { kind: "next", name: name.text, nameAt: { start: name.start, end } };
   const wrong = `A line can set the next value of "${name.text}" only, at [t+1].`;
-  throw refuse("unreadable-line", reader.text, { start: name.start, end }, wrong, forms);
+  throw ruleError("unreadable-line", reader.text, { start: name.start, end }, wrong, forms);
 }
 
 function expectEquals(reader: TokenReader, from: Token): void {
   if (reader.accept("=")) return;
   const found = reader.peek();
-  const joins = joiningStrength(found) > 0 || found.kind === "newline" || found.kind === "end";
+  const joins = binaryPrecedence(found) > 0 || found.kind === "newline" || found.kind === "end";
   const place = joins ? { start: from.start, end: Math.max(from.end, found.start) } : found;
-  throw refuse("unreadable-line", reader.text, place, "The line does not say what it sets.", forms);
+  throw ruleError("unreadable-line", reader.text, place, "The line does not say what it sets.", forms);
 }
 
 function parseStatement(reader: TokenReader): Statement {
@@ -63,7 +63,7 @@ function parseStatement(reader: TokenReader): Statement {
         : after.text === ","
           ? "Write decimals with a point, as in 0.5."
           : "Take it away, or open a bracket for it.";
-    throw refuse("stray-sign", reader.text, after, `The sign "${after.text}" joins nothing here.`, remedy);
+    throw ruleError("stray-sign", reader.text, after, `The sign "${after.text}" joins nothing here.`, remedy);
   }
   return { ...target, expression, start: first.start, end: expression.end };
 }
@@ -78,5 +78,5 @@ export function parseRule(text: string): readonly Statement[] {
     statements.push(parseStatement(reader));
   }
   if (statements.length > 0) return statements;
-  throw refuse("empty-rule", text, reader.peek(), "The rule has no line.", forms);
+  throw ruleError("empty-rule", text, reader.peek(), "The rule has no line.", forms);
 }

@@ -1,8 +1,8 @@
-import { refuse } from "../refusals.js";
+import { ruleError } from "../errors.js";
 import type { Token } from "./token.js";
 
 /** Signs of other alphabets that mean the same to a reader, and what they are read as. */
-const lookAlikes: ReadonlyMap<string, string> = new Map([
+const equivalents: ReadonlyMap<string, string> = new Map([
   ["\u2212", "-"],
   ["\u00d7", "*"],
   ["\u00b7", "*"],
@@ -35,11 +35,11 @@ const patterns: readonly (readonly [Token["kind"] | "skip", RegExp])[] = [
   ["sign", /<=|>=|==|!=|[-+*/^()[\],=<>\u2212\u00d7\u00b7\u22c5\u2264\u2265\u2260]/uy],
 ];
 
-function strangeSign(text: string, start: number): never {
+function unknownSymbol(text: string, start: number): never {
   const pair = text.slice(start, start + 2);
   const sign = remedies.has(pair) ? pair : String.fromCodePoint(text.codePointAt(start)!);
   const remedy = remedies.get(sign) ?? "Rules use names, numbers, + - * / ^ ( ) [ ] , and comparisons.";
-  throw refuse(
+  throw ruleError(
     "unreadable-sign",
     text,
     { start, end: start + sign.length },
@@ -49,12 +49,12 @@ function strangeSign(text: string, start: number): never {
 }
 
 function nextToken(text: string, start: number): { kind: Token["kind"] | "skip"; end: number } {
-  if (text.startsWith("**", start)) strangeSign(text, start);
+  if (text.startsWith("**", start)) unknownSymbol(text, start);
   for (const [kind, pattern] of patterns) {
     pattern.lastIndex = start;
     if (pattern.test(text)) return { kind, end: pattern.lastIndex };
   }
-  return strangeSign(text, start);
+  return unknownSymbol(text, start);
 }
 
 /** Cuts a normalised text into tokens, each with its place. Comments and blanks leave no token. */
@@ -63,7 +63,7 @@ export function readTokens(text: string): readonly Token[] {
   for (let start = 0; start < text.length; ) {
     const { kind, end } = nextToken(text, start);
     const raw = text.slice(start, end);
-    if (kind !== "skip") tokens.push({ kind, text: lookAlikes.get(raw) ?? raw, start, end });
+    if (kind !== "skip") tokens.push({ kind, text: equivalents.get(raw) ?? raw, start, end });
     start = end;
   }
   tokens.push({ kind: "end", text: "", start: text.length, end: text.length });

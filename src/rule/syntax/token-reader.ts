@@ -1,4 +1,4 @@
-import { refuse, tooLong } from "../refusals.js";
+import { ruleError, tooLargeError } from "../errors.js";
 import { readTokens } from "./read-tokens.js";
 import type { Span, Token } from "./token.js";
 
@@ -25,7 +25,7 @@ export interface TokenReader {
 
 function limitedTokens(text: string): readonly Token[] {
   if (text.length > limits.letters) {
-    throw tooLong("letters", limits.letters, text.length, text, {
+    throw tooLargeError("letters", limits.letters, text.length, text, {
       start: limits.letters,
       end: limits.letters + 1,
     });
@@ -44,24 +44,24 @@ export function tokenReader(text: string): TokenReader {
     position++;
     return token;
   };
-  const comesNext = (sign: string): boolean => peek().kind === "sign" && peek().text === sign;
+  const isNext = (sign: string): boolean => peek().kind === "sign" && peek().text === sign;
   return {
     text,
     peek,
     take,
-    accept: (sign) => comesNext(sign) && take() !== undefined,
+    accept: (sign) => isNext(sign) && take() !== undefined,
     expect: (sign, remedy) => {
-      if (comesNext(sign)) return take();
+      if (isNext(sign)) return take();
       const found = peek();
-      throw refuse("missing-sign", text, found, `A "${sign}" is missing ${before(found)}.`, remedy);
+      throw ruleError("missing-sign", text, found, `A "${sign}" is missing ${placeBefore(found)}.`, remedy);
     },
     count: (place) => {
       nodes++;
-      if (nodes > limits.nodes) throw tooLong("parts", limits.nodes, nodes, text, place);
+      if (nodes > limits.nodes) throw tooLargeError("parts", limits.nodes, nodes, text, place);
     },
     nested: (read) => {
       depth++;
-      if (depth > limits.depth) throw tooLong("levels of nesting", limits.depth, depth, text, peek());
+      if (depth > limits.depth) throw tooLargeError("levels of nesting", limits.depth, depth, text, peek());
       const result = read();
       depth--;
       return result;
@@ -70,7 +70,7 @@ export function tokenReader(text: string): TokenReader {
 }
 
 /** How a message names the place in front of a token. */
-export function before(token: Token): string {
+export function placeBefore(token: Token): string {
   if (token.kind === "end") return "at the end of the rule";
   if (token.kind === "newline") return "at the end of the line";
   return `before "${token.text}"`;

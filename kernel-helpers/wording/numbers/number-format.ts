@@ -26,7 +26,7 @@ export function numberFormat(changes: Partial<NumberFormat> | "standard" = {}): 
 }
 
 /** Plain digits with the signs of a format: "-1234.5" -> "-1.234,5". Digits below ten thousand group too. */
-export function written(plain: string, format: NumberFormat): string {
+export function formatDigits(plain: string, format: NumberFormat): string {
   const [whole = "", fraction] = plain.split(".");
   const grouped = format.group === "" ? whole : whole.replace(/\B(?=(\d{3})+$)/g, () => format.group);
   return fraction === undefined ? grouped : `${grouped}${format.decimal}${fraction}`;

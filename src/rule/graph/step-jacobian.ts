@@ -3,18 +3,18 @@ import type { Node } from "./node.js";
 import type { RuleGraph } from "./rule-graph.js";
 
 /** Partial derivatives of one step. */
-export interface StepDerivatives {
+export interface StepJacobian {
   /** [slot][slot]: next value of the first by present value of the second. */
   readonly byState: readonly (readonly Node[])[];
   /** [slot][parameter] */
   readonly byParameter: readonly (readonly Node[])[];
 }
 
-const known = new WeakMap<RuleGraph, StepDerivatives>();
+const cache = new WeakMap<RuleGraph, StepJacobian>();
 
 /** All partial derivatives of one step of a rule, worked out once. */
-export function stepDerivatives(rule: RuleGraph): StepDerivatives {
-  let found = known.get(rule);
+export function stepJacobian(rule: RuleGraph): StepJacobian {
+  let found = cache.get(rule);
   if (found === undefined) {
     const by = (role: "state" | "parameter", count: number): readonly (readonly Node[])[] => {
       const columns = Array.from({ length: count }, (_, slot) => {
@@ -24,7 +24,7 @@ export function stepDerivatives(rule: RuleGraph): StepDerivatives {
       return rule.next.map((_, row) => columns.map((column) => column[row]!));
     };
     found = { byState: by("state", rule.states), byParameter: by("parameter", rule.parameters) };
-    known.set(rule, found);
+    cache.set(rule, found);
   }
   return found;
 }

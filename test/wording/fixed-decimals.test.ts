@@ -1,6 +1,6 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import { decimalsFor, fixedDecimals, minorUnits } from "../../kernel-helpers/tables/fixed-decimals.js";
+import { decimalsFor, fixedDecimals, minorUnits } from "../../kernel-helpers/wording/index.js";
 
 describe("fixedDecimals", () => {
   // Source: arithmetic of the printed decimal, ties away from zero (common practice for money, "half-up").

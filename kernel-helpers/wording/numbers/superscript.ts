@@ -19,7 +19,7 @@ const superscripts: Readonly<Record<string, string>> = {
  *
  * @example raised("120 10^4 cells/mL"); // "120 × 10⁴ cells/mL"
  */
-export function raised(text: string): string {
+export function superscript(text: string): string {
   const multiplied = text.replace(/(?<=\d) +(?=10\^-?\d)/g, " × ");
   return multiplied.replace(/(?<=[\p{L}\d)])\^(-?\d{1,2})(?![\d.])/gu, (_, power: string) =>
     [...power].map((sign) => superscripts[sign] ?? sign).join(""),

@@ -1,7 +1,7 @@
 import type { Token } from "./token.js";
 
 /** Binding strength; a larger number binds closer. Unary minus stands between * and ^, `not` above `and`. */
-export const strengths: ReadonlyMap<string, number> = new Map([
+export const precedence: ReadonlyMap<string, number> = new Map([
   ["or", 1],
   ["and", 2],
   ["<", 4],
@@ -16,10 +16,10 @@ export const strengths: ReadonlyMap<string, number> = new Map([
   ["/", 6],
   ["^", 8],
 ]);
-export const unaryMinusStrength = 7;
-export const notStrength = 3;
-export const comparisonStrength = 4;
+export const unaryMinusPrecedence = 7;
+export const notPrecedence = 3;
+export const comparisonPrecedence = 4;
 
 /** The strength with which a token joins what stands left of it; 0 if it joins nothing. */
-export const joiningStrength = (token: Token): number =>
-  token.kind === "sign" || token.kind === "name" ? (strengths.get(token.text) ?? 0) : 0;
+export const binaryPrecedence = (token: Token): number =>
+  token.kind === "sign" || token.kind === "name" ? (precedence.get(token.text) ?? 0) : 0;

@@ -1,3 +1,4 @@
+import { freezeDeep } from "../../numeric/index.js";
 import { makeRule } from "../make-rule.js";
 import type { RecurrenceOptions } from "../recurrence-options.js";
 import type { Rule } from "../rule.js";
@@ -7,7 +8,10 @@ import type { CatalogueEntry } from "./named-rule.js";
 export type NamedRuleOptions = Omit<RecurrenceOptions, "parameters">;
 
 /** Units of all names, from that of the first state: "1/level" becomes "1/(cells/mL)", written out. */
-function unitsFrom(entry: CatalogueEntry, given: Readonly<Record<string, string>>): Record<string, string> {
+function unitsFromState(
+  entry: CatalogueEntry,
+  given: Readonly<Record<string, string>>,
+): Record<string, string> {
   const states = Object.keys(entry.quantities);
   const level = given[states[0]!];
   if (level === undefined) return { ...given };
@@ -19,23 +23,18 @@ function unitsFrom(entry: CatalogueEntry, given: Readonly<Record<string, string>
   return { ...Object.fromEntries(derived), ...given };
 }
 
-const freeze = <T>(value: T): T => {
-  if (typeof value === "object" && value !== null) Object.values(value).forEach(freeze);
-  return Object.freeze(value);
-};
-
 /** Makes the rule of a catalogue entry; what is given prevails over what the entry says. */
-export function named(entry: CatalogueEntry, options: NamedRuleOptions = {}): Rule {
+export function catalogueRule(entry: CatalogueEntry, options: NamedRuleOptions = {}): Rule {
   const { text, inputs = [], bounds = {}, start = {}, ...about } = entry;
-  const inputsGiven = [...new Set([...inputs, ...(options.inputs ?? [])])];
+  const allInputs = [...new Set([...inputs, ...(options.inputs ?? [])])];
   const free = <T>(record: Readonly<Record<string, T>>): Record<string, T> =>
-    Object.fromEntries(Object.entries(record).filter(([name]) => !inputsGiven.includes(name)));
+    Object.fromEntries(Object.entries(record).filter(([name]) => !allInputs.includes(name)));
   const full: RecurrenceOptions = {
     ...options,
-    inputs: inputsGiven,
-    units: unitsFrom(entry, options.units ?? {}),
+    inputs: allInputs,
+    units: unitsFromState(entry, options.units ?? {}),
     bounds: { ...free(bounds), ...options.bounds },
     start: { ...free(start), ...options.start },
   };
-  return makeRule(text, full, freeze(about));
+  return makeRule(text, full, freezeDeep(about));
 }

@@ -1,4 +1,4 @@
-import type { RandomStream } from "../../numeric/index.js";
+import type { RandomStream } from "./random-stream.js";
 
 /** Above this mean the counting of single events gives way to transformed rejection. */
 const few = 30;

@@ -8,7 +8,7 @@ const namesRead = (rule: Rule): readonly Extract<Expression, { kind: "name" }>[]
   ruleDefinition(rule).checked.statements.flatMap(({ expression }) => readNames(expression));
 
 /** By input of the rule: the earliest and latest period that a step from t reads, counted from t. */
-export function inputReach(rule: Rule): readonly (readonly [earliest: number, latest: number])[] {
+export function inputOffsets(rule: Rule): readonly (readonly [earliest: number, latest: number])[] {
   const names = namesRead(rule);
   return rule.inputs.map((input) => {
     const offsets = names.filter(({ name }) => name === input).map(({ offset }) => offset);
@@ -17,4 +17,4 @@ export function inputReach(rule: Rule): readonly (readonly [earliest: number, la
 }
 
 /** Whether a step depends on the period index t itself. */
-export const readsPeriod = (rule: Rule): boolean => namesRead(rule).some(({ name }) => name === "t");
+export const dependsOnPeriod = (rule: Rule): boolean => namesRead(rule).some(({ name }) => name === "t");

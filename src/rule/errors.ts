@@ -2,7 +2,7 @@ import { ModelError, nearestNames } from "../numeric/index.js";
 import type { Span } from "./syntax/token.js";
 
 /** The line of the text that holds the place, with a caret under each of its letters. */
-function showPlace(text: string, place: Span): string {
+function excerptWithCarets(text: string, place: Span): string {
   const from = text.lastIndexOf("\n", place.start - 1) + 1;
   const lineEnd = text.indexOf("\n", from);
   const to = lineEnd === -1 ? text.length : lineEnd;
@@ -15,14 +15,20 @@ function showPlace(text: string, place: Span): string {
 }
 
 /** A refusal that points into the rule's text: what was wrong, where, what to do. */
-export function refuse(code: string, text: string, place: Span, wrong: string, remedy: string): ModelError {
+export function ruleError(
+  code: string,
+  text: string,
+  place: Span,
+  wrong: string,
+  remedy: string,
+): ModelError {
   const start = Math.min(place.start, text.length);
   const end = Math.min(Math.max(place.end, start), text.length);
-  const message = `${wrong}\n${showPlace(text, { start, end })}\n${remedy}`;
+  const message = `${wrong}\n${excerptWithCarets(text, { start, end })}\n${remedy}`;
   return new ModelError(code, message, { text, start, end });
 }
 
-const list = (names: readonly string[]): string => (names.length === 0 ? "none" : names.join(", "));
+const nameList = (names: readonly string[]): string => (names.length === 0 ? "none" : names.join(", "));
 
 /** "Did you mean ...?" for the nearest of the known names, or nothing. */
 export function suggestion(name: string, known: readonly string[]): string {
@@ -30,7 +36,7 @@ export function suggestion(name: string, known: readonly string[]): string {
   return nearest.length === 0 ? "" : ` Did you mean "${nearest.join('" or "')}"?`;
 }
 
-export function unknownName(
+export function unknownNameError(
   text: string,
   place: Span,
   name: string,
@@ -40,19 +46,19 @@ export function unknownName(
     readonly functions: readonly string[];
   },
 ): ModelError {
-  const others = known.others.length === 0 ? "" : ` Other names: ${list(known.others)}.`;
+  const others = known.others.length === 0 ? "" : ` Other names: ${nameList(known.others)}.`;
   const hint = suggestion(name, [...known.parameters, ...known.others, ...known.functions]);
-  return refuse(
+  return ruleError(
     "unknown-name",
     text,
     place,
     `Unknown name "${name}" in the rule.`,
-    `Known parameters: ${list(known.parameters)}.${others}${hint}`,
+    `Known parameters: ${nameList(known.parameters)}.${others}${hint}`,
   );
 }
 
-export function impliedProduct(text: string, place: Span, left: string, right: string): ModelError {
-  return refuse(
+export function missingOperatorError(text: string, place: Span, left: string, right: string): ModelError {
+  return ruleError(
     "implied-product",
     text,
     place,
@@ -61,13 +67,13 @@ export function impliedProduct(text: string, place: Span, left: string, right: s
   );
 }
 
-export function notAFunction(
+export function unknownFunctionError(
   text: string,
   place: Span,
   name: string,
   functions: readonly string[],
 ): ModelError {
-  return refuse(
+  return ruleError(
     "not-a-function",
     text,
     place,
@@ -76,9 +82,9 @@ export function notAFunction(
   );
 }
 
-export function wrongArity(text: string, place: Span, usage: string, given: number): ModelError {
+export function argumentCountError(text: string, place: Span, usage: string, given: number): ModelError {
   const values = given === 1 ? "1 value" : `${given} values`;
-  return refuse(
+  return ruleError(
     "wrong-arity",
     text,
     place,
@@ -87,8 +93,14 @@ export function wrongArity(text: string, place: Span, usage: string, given: numb
   );
 }
 
-export function tooLong(what: string, limit: number, given: number, text: string, place: Span): ModelError {
-  return refuse(
+export function tooLargeError(
+  what: string,
+  limit: number,
+  given: number,
+  text: string,
+  place: Span,
+): ModelError {
+  return ruleError(
     "rule-too-large",
     text,
     place,

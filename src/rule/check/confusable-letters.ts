@@ -1,5 +1,5 @@
 /** Letters of other alphabets that look like Latin ones in most typefaces, and those they look like. */
-const alike: ReadonlyMap<string, string> = new Map(
+const confusables: ReadonlyMap<string, string> = new Map(
   Object.entries({
     Cyrillic: ["АВЕКМНОРСТХаеорсухі", "ABEKMHOPCTXaeopcyxi"],
     Greek: ["ΑΒΕΖΗΙΚΜΝΟΡΤΥΧονκ", "ABEZHIKMNOPTYXovk"],
@@ -7,5 +7,5 @@ const alike: ReadonlyMap<string, string> = new Map(
 );
 
 /** The name with every such letter replaced: two names of one appearance become the same. */
-export const appearance = (name: string): string =>
-  [...name].map((letter) => alike.get(letter) ?? letter).join("");
+export const skeleton = (name: string): string =>
+  [...name].map((letter) => confusables.get(letter) ?? letter).join("");

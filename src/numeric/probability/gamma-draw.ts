@@ -1,4 +1,4 @@
-import type { RandomStream } from "../../numeric/index.js";
+import type { RandomStream } from "./random-stream.js";
 
 /**
  * A gamma value of mean `shape` and scale 1.

@@ -5,25 +5,25 @@ import type { Expression } from "./syntax/expression.js";
 import type { Span } from "./syntax/token.js";
 
 /** A function in a rule at which a step is not smooth, with its place in the text. */
-export interface RoughPlace extends Span {
+export interface NonsmoothCall extends Span {
   readonly function: string;
 }
 
 /** Where a step bends or jumps as states or parameters move. */
-export interface Roughness {
+export interface NonsmoothCalls {
   /** min, max, abs, if: the slope changes at once; derivatives there are one-sided. */
-  readonly kinks: readonly RoughPlace[];
+  readonly kinks: readonly NonsmoothCall[];
   /** floor, ceil, round, sign, mod: the value changes at once; no slope tells a fit where to go. */
-  readonly jumps: readonly RoughPlace[];
+  readonly jumps: readonly NonsmoothCall[];
 }
 
-const bending: ReadonlySet<string> = new Set(["min", "max", "abs", "if"]);
-const jumping: ReadonlySet<string> = new Set(["floor", "ceil", "round", "sign", "mod"]);
+const withKink: ReadonlySet<string> = new Set(["min", "max", "abs", "if"]);
+const withJump: ReadonlySet<string> = new Set(["floor", "ceil", "round", "sign", "mod"]);
 
 function callsIn(at: Expression): readonly Extract<Expression, { kind: "call" }>[] {
   if (at.kind === "unary") return callsIn(at.operand);
   if (at.kind === "binary") return [...callsIn(at.left), ...callsIn(at.right)];
-  return at.kind === "call" ? [at, ...at.inside.flatMap(callsIn)] : [];
+  return at.kind === "call" ? [at, ...at.args.flatMap(callsIn)] : [];
 }
 
 /**
@@ -32,16 +32,16 @@ function callsIn(at: Expression): readonly Extract<Expression, { kind: "call" }>
  *
  * @example roughness(recurrence("N[t+1] = max(N - c, 0)")).kinks[0].function; // "max"
  */
-export function roughness(rule: Rule): Roughness {
+export function nonsmoothCalls(rule: Rule): NonsmoothCalls {
   const fixed = new Set(["t", ...rule.inputs]);
   const moves = (call: Extract<Expression, { kind: "call" }>): boolean => {
-    const decisive = call.name === "if" ? call.inside.slice(0, 1) : call.inside;
+    const decisive = call.name === "if" ? call.args.slice(0, 1) : call.args;
     return decisive.flatMap(readNames).some(({ name }) => !fixed.has(name));
   };
   const calls = ruleDefinition(rule).checked.statements.flatMap(({ expression }) => callsIn(expression));
-  const among = (names: ReadonlySet<string>): readonly RoughPlace[] =>
+  const among = (names: ReadonlySet<string>): readonly NonsmoothCall[] =>
     calls
       .filter((call) => names.has(call.name) && moves(call))
       .map(({ name, start, end }) => ({ function: name, start, end }));
-  return { kinks: among(bending), jumps: among(jumping) };
+  return { kinks: among(withKink), jumps: among(withJump) };
 }

@@ -1,15 +1,25 @@
 import type { Rule } from "../rule.js";
-import { type NamedRuleOptions, named } from "./named.js";
+import { catalogueRule, type NamedRuleOptions } from "./catalogue-rule.js";
 import type { CatalogueEntry } from "./named-rule.js";
-import { aboveOne, capacity, growth, inLevels, level, perLevel, positive, pure, rate } from "./quantities.js";
+import {
+  aboveOne,
+  carryingCapacity,
+  dimensionless,
+  growthFactor,
+  inStateUnit,
+  level,
+  perStateUnit,
+  positive,
+  rate,
+} from "./quantities.js";
 
 const logistic: CatalogueEntry = {
   name: "logistic",
   title: "Quadratic rule (discrete logistic)",
   text: "ΔN = r*N*(1 - N/K)",
   source: "May (1976), Simple mathematical models with very complicated dynamics, Nature 261, 459-467",
-  quantities: { N: level, r: rate, K: capacity },
-  holds: ["r > 0", "r <= 3", "K > 0", "N0 >= 0 and N0 <= K*(1 + 1/r)"],
+  quantities: { N: level, r: rate, K: carryingCapacity },
+  validWhen: ["r > 0", "r <= 3", "K > 0", "N0 >= 0 and N0 <= K*(1 + 1/r)"],
   bounds: { r: positive, K: positive, N: positive },
   start: { r: 0.5 },
   equilibria: [
@@ -29,8 +39,8 @@ const bevertonHolt: CatalogueEntry = {
   title: "Beverton-Holt rule: the logistic curve sampled at equal steps",
   text: "N[t+1] = R*N/(1 + (R - 1)*N/K)",
   source: "Beverton and Holt (1957), On the Dynamics of Exploited Fish Populations",
-  quantities: { N: level, R: growth, K: capacity },
-  holds: ["R > 1", "K > 0", "N0 >= 0"],
+  quantities: { N: level, R: growthFactor, K: carryingCapacity },
+  validWhen: ["R > 1", "K > 0", "N0 >= 0"],
   bounds: { R: aboveOne, K: positive, N: positive },
   start: { R: 1.5 },
   equilibria: [
@@ -46,8 +56,8 @@ const ricker: CatalogueEntry = {
   title: "Ricker rule",
   text: "N[t+1] = N*exp(r*(1 - N/K))",
   source: "Ricker (1954), Stock and recruitment, J. Fish. Res. Board Can. 11, 559-623",
-  quantities: { N: level, r: rate, K: capacity },
-  holds: ["r > 0", "K > 0", "N0 >= 0"],
+  quantities: { N: level, r: rate, K: carryingCapacity },
+  validWhen: ["r > 0", "K > 0", "N0 >= 0"],
   bounds: { r: positive, K: positive, N: positive },
   start: { r: 0.5 },
   equilibria: [
@@ -63,8 +73,13 @@ const hassell: CatalogueEntry = {
   title: "Hassell rule",
   text: "N[t+1] = lam*N/(1 + a*N)^b",
   source: "Hassell (1975), Density-dependence in single-species populations, J. Anim. Ecol. 44, 283-295",
-  quantities: { N: level, lam: growth, a: perLevel("crowding"), b: pure("how sharply crowding acts") },
-  holds: ["lam > 1", "a > 0", "b > 0", "N0 >= 0"],
+  quantities: {
+    N: level,
+    lam: growthFactor,
+    a: perStateUnit("crowding"),
+    b: dimensionless("how sharply crowding acts"),
+  },
+  validWhen: ["lam > 1", "a > 0", "b > 0", "N0 >= 0"],
   bounds: { lam: aboveOne, a: positive, b: positive, N: positive },
   start: { lam: 1.5, b: 1 },
   equilibria: [
@@ -81,8 +96,13 @@ const maynardSmithSlatkin: CatalogueEntry = {
   title: "Maynard Smith-Slatkin rule",
   text: "N[t+1] = lam*N/(1 + (a*N)^b)",
   source: "Maynard Smith and Slatkin (1973), The stability of predator-prey systems, Ecology 54, 384-391",
-  quantities: { N: level, lam: growth, a: perLevel("crowding"), b: pure("how sharply crowding acts") },
-  holds: ["lam > 1", "a > 0", "b > 0", "N0 >= 0"],
+  quantities: {
+    N: level,
+    lam: growthFactor,
+    a: perStateUnit("crowding"),
+    b: dimensionless("how sharply crowding acts"),
+  },
+  validWhen: ["lam > 1", "a > 0", "b > 0", "N0 >= 0"],
   bounds: { lam: aboveOne, a: positive, b: positive, N: positive },
   start: { lam: 1.5, b: 1 },
   equilibria: [
@@ -100,8 +120,8 @@ const thetaLogistic: CatalogueEntry = {
   text: "N[t+1] = N*exp(r*(1 - (N/K)^theta))",
   source:
     "Gilpin and Ayala (1973), Global models of growth and competition, PNAS 70, 3590-3593, in Ricker's form",
-  quantities: { N: level, r: rate, K: capacity, theta: pure("how late crowding sets in") },
-  holds: ["r > 0", "K > 0", "theta > 0", "N0 >= 0"],
+  quantities: { N: level, r: rate, K: carryingCapacity, theta: dimensionless("how late crowding sets in") },
+  validWhen: ["r > 0", "K > 0", "theta > 0", "N0 >= 0"],
   bounds: { r: positive, K: positive, theta: positive, N: positive },
   start: { r: 0.5, theta: 1 },
   equilibria: [
@@ -117,8 +137,12 @@ const gompertz: CatalogueEntry = {
   title: "Discrete Gompertz rule",
   text: "N[t+1] = exp(a)*N^b",
   source: "Gompertz (1825), Phil. Trans. R. Soc. 115, 513-583, stepped",
-  quantities: { N: level, a: pure("intercept on the log scale"), b: pure("slope on the log scale") },
-  holds: ["abs(b) < 1", "N0 > 0"],
+  quantities: {
+    N: level,
+    a: dimensionless("intercept on the log scale"),
+    b: dimensionless("slope on the log scale"),
+  },
+  validWhen: ["abs(b) < 1", "N0 > 0"],
   bounds: { b: [-1, 1], N: positive },
   start: { b: 0.8 },
   equilibria: [{ at: { N: "exp(a/(1 - b))" }, multiplier: "b" }],
@@ -133,8 +157,8 @@ const allee: CatalogueEntry = {
   text: "N[t+1] = N*exp(r*(1 - N/K)*(N/A - 1))",
   source:
     "Allee (1931), Animal Aggregations, for the effect; the exponential form is common practice, no source",
-  quantities: { N: level, r: rate, K: capacity, A: inLevels("level below which it collapses") },
-  holds: ["r > 0", "A > 0", "A < K", "N0 >= 0"],
+  quantities: { N: level, r: rate, K: carryingCapacity, A: inStateUnit("level below which it collapses") },
+  validWhen: ["r > 0", "A > 0", "A < K", "N0 >= 0"],
   bounds: { r: positive, K: positive, A: positive, N: positive },
   start: { r: 0.3 },
   equilibria: [
@@ -148,19 +172,19 @@ const allee: CatalogueEntry = {
 };
 
 /** ΔN = r N (1 - N/K). */
-export const logisticRule = (options?: NamedRuleOptions): Rule => named(logistic, options);
+export const logisticRule = (options?: NamedRuleOptions): Rule => catalogueRule(logistic, options);
 /** N' = R N/(1 + (R - 1) N/K). */
-export const bevertonHoltRule = (options?: NamedRuleOptions): Rule => named(bevertonHolt, options);
+export const bevertonHoltRule = (options?: NamedRuleOptions): Rule => catalogueRule(bevertonHolt, options);
 /** N' = N exp(r (1 - N/K)). */
-export const rickerRule = (options?: NamedRuleOptions): Rule => named(ricker, options);
+export const rickerRule = (options?: NamedRuleOptions): Rule => catalogueRule(ricker, options);
 /** N' = lam N/(1 + a N)^b. */
-export const hassellRule = (options?: NamedRuleOptions): Rule => named(hassell, options);
+export const hassellRule = (options?: NamedRuleOptions): Rule => catalogueRule(hassell, options);
 /** N' = lam N/(1 + (a N)^b). */
 export const maynardSmithSlatkinRule = (options?: NamedRuleOptions): Rule =>
-  named(maynardSmithSlatkin, options);
+  catalogueRule(maynardSmithSlatkin, options);
 /** N' = N exp(r (1 - (N/K)^theta)). */
-export const thetaLogisticRule = (options?: NamedRuleOptions): Rule => named(thetaLogistic, options);
+export const thetaLogisticRule = (options?: NamedRuleOptions): Rule => catalogueRule(thetaLogistic, options);
 /** N' = e^a N^b. */
-export const gompertzRule = (options?: NamedRuleOptions): Rule => named(gompertz, options);
+export const gompertzRule = (options?: NamedRuleOptions): Rule => catalogueRule(gompertz, options);
 /** N' = N exp(r (1 - N/K)(N/A - 1)). */
-export const alleeRule = (options?: NamedRuleOptions): Rule => named(allee, options);
+export const alleeRule = (options?: NamedRuleOptions): Rule => catalogueRule(allee, options);
