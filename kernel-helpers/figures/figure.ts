@@ -1,3 +1,4 @@
+import { checkCall } from "../options/index.js";
 import { type Bundle, showing, type Table } from "../tables/index.js";
 import { figureBundle } from "./figure-bundle.js";
 import type { Layer } from "./layer.js";
@@ -58,6 +59,7 @@ export interface FigureOptions {
  *   layers: [{ mark: "points", name: "counted", x: [0, 1], y: [90, 83] }] });
  */
 export function figure(options: FigureOptions): Figure {
+  checkCall("figure", arguments);
   const { title, x, y, layers } = options;
   const panels = options.panels ?? (x && y && layers ? [{ title: "", x, y, layers }] : []);
   if (panels.length === 0 || panels.some((panel) => panel.layers.length === 0)) throw emptyFigure(title);

@@ -1,4 +1,5 @@
 import { libraryAgain, warmPictures } from "../figures/index.js";
+import { checkCall } from "../options/index.js";
 import { type Bundle, escapeHtml, look, showing, superscript, typeface, untypeset } from "../tables/index.js";
 import { type CaseHead, caseLog, defaultSeed } from "./case-log.js";
 import { cautionOf, type Domain, domainCautions } from "./cautions.js";
@@ -26,6 +27,7 @@ export interface CaseOptions {
  * @example openCase({ title: "Algae line 3", question: "When can it be drawn down?", domain: "cultures", seed: 7 });
  */
 export function openCase(options: CaseOptions): void {
+  checkCall("openCase", arguments);
   const known = Object.keys(domainCautions);
   if (!known.includes(options.domain)) throw refuseUnknownDomain(options.domain, known);
   const head: CaseHead = { ...options, seed: options.seed ?? defaultSeed };
@@ -59,6 +61,7 @@ export function openCase(options: CaseOptions): void {
  * @example answer(`Draw down at hour 138. ${ready.sentence}`);
  */
 export function answer(said: string): void {
+  checkCall("answer", arguments);
   const sentence = superscript(said);
   if (caseLog.head() === undefined) throw refuseNoCase("answer(...)");
   if (sentence.trim() === "") throw refuseEmptyAnswer();
@@ -91,6 +94,7 @@ function answerParts(answer: string): string {
  * @example closeCase();
  */
 export function closeCase(): void {
+  checkCall("closeCase", arguments);
   const head = caseLog.head();
   if (head === undefined) throw refuseNoCase("closeCase()");
   if (caseLog.answers().length === 0) throw refuseUnanswered();

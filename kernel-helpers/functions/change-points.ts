@@ -9,6 +9,7 @@ import {
 import type { Observations } from "../../src/record/index.js";
 import type { Rule } from "../../src/rule/index.js";
 import { type Figure, figure, type Panel } from "../figures/index.js";
+import { checkCall } from "../options/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { shownTogether } from "./shown-together.js";
@@ -26,6 +27,7 @@ export function changePoint(
   observations: Observations,
   options: ChangePointOptions = {},
 ): ChangePoint {
+  checkCall("changePoint", arguments);
   const looked = findChangePoint(rule, observations, { seed: caseLog.seed(), ...options });
   caseLog.noteStep(`looked for a break in "${rule.text}": ${looked.sentence}`);
   return showing({ ...looked }, () => shownTogether([breaksTable(looked), breaksFigure(looked)]));
@@ -42,6 +44,7 @@ export function densityDependence(
   observations: Observations,
   options: DensityOptions = {},
 ): DensityDependence {
+  checkCall("densityDependence", arguments);
   const tested = testDensity(observations, { seed: caseLog.seed(), ...options });
   caseLog.noteStep(`tested density dependence: ${tested.sentence}`);
   return showing({ ...tested }, () => shownTogether([densityTable(tested)]));

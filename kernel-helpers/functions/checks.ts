@@ -1,5 +1,6 @@
 import type { Fit } from "../../src/estimate/index.js";
 import { type Check, type CheckOptions, check as checkFit } from "../../src/evidence/index.js";
+import { checkCall } from "../options/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { residualPanels } from "./residual-panels.js";
@@ -14,6 +15,7 @@ import { shownTogether } from "./shown-together.js";
  * @example check(fit(crowding, counts, { errors: "observation" })).sentence;
  */
 export function check(fit: Fit, options: CheckOptions = {}): Check {
+  checkCall("check", arguments);
   const checked = checkFit(fit, { seed: caseLog.seed(), ...options });
   caseLog.noteStep(`checked "${fit.rule.text}": ${checked.sentence}`);
   return showing({ ...checked }, () =>

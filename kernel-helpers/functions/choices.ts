@@ -11,6 +11,7 @@ import {
 } from "../../src/decision/index.js";
 import type { Fit } from "../../src/estimate/index.js";
 import type { Rule } from "../../src/rule/index.js";
+import { checkCall } from "../options/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { showBest, showSensitivity, showTradeoff } from "./show-choices.js";
@@ -26,6 +27,7 @@ import { shownTogether } from "./shown-together.js";
  *   maximize: { level: "catch", at: 100 } }).atEnd // false
  */
 export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum {
+  checkCall("optimize", arguments);
   const found = bestSetting(subject, { seed: caseLog.seed(), ...options });
   caseLog.noteStep(`asked which ${found.vary} is best for ${found.measure}`);
   return showing({ ...found }, () => shownTogether(showBest(found)));
@@ -38,6 +40,7 @@ export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum
  * @example sensitivity(fitted, { periods: 12, answer: { time: "N", risesTo: 600 } }).rows.length // 3
  */
 export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): Sensitivity {
+  checkCall("sensitivity", arguments);
   const found = sensitivityOf(subject, { seed: caseLog.seed(), ...options });
   caseLog.noteStep(`asked what ${found.measure} hangs on`);
   return showing({ ...found }, () => shownTogether(showSensitivity(found)));
@@ -52,6 +55,7 @@ export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): S
  *   answers: { lowest: { lowest: "stock" } } }).rows[0].answers.lowest // 12
  */
 export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeoff {
+  checkCall("tradeoff", arguments);
   const found = tradeoffOf(subject, { seed: caseLog.seed(), ...options });
   caseLog.noteStep(`set ${found.rows.length} choices of ${found.vary} side by side`);
   return showing({ ...found }, () => shownTogether(showTradeoff(found)));

@@ -12,6 +12,7 @@ import {
 import type { Fit } from "../../src/estimate/index.js";
 import type { Forecast, Simulation } from "../../src/projection/index.js";
 import type { Rule } from "../../src/rule/index.js";
+import { checkCall } from "../options/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { levelWords, showNextReading, showReach, showSolved } from "./show-decisions.js";
@@ -24,6 +25,7 @@ import { shownTogether } from "./shown-together.js";
  * @example timeToReach(ahead, { state: "N", risesTo: 120 }).sentence;
  */
 export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOptions): TimeToReach {
+  checkCall("timeToReach", arguments);
   const found = reachesValue(ahead, options);
   caseLog.noteStep(`asked when ${found.state} ${levelWords(found)}`);
   return showing({ ...found }, () => shownTogether(showReach(found, ahead)));
@@ -39,6 +41,7 @@ export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOp
  *   until: { level: "owed", at: 12, is: 0 } }).solutions[0].value // 1000*0.01/(1 - 1.01**-12)
  */
 export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
+  checkCall("solveFor", arguments);
   const found = solveForSetting(subject, { seed: caseLog.seed(), ...options });
   caseLog.noteStep(`asked what ${found.vary} brings ${found.measure} to its target`);
   return showing({ ...found }, () => shownTogether(showSolved(found)));
@@ -51,6 +54,7 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
  * @example nextReading(fitted, { periods: 10, answer: { parameter: "K" } }).sentence;
  */
 export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOptions): NextReading {
+  checkCall("nextReading", arguments);
   const found = nextReadingOf(fits, { seed: caseLog.seed(), ...options });
   caseLog.noteStep(`asked which further reading of ${found.state} would ${found.purpose}`);
   return showing({ ...found }, () => shownTogether(showNextReading(found)));

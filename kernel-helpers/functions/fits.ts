@@ -10,6 +10,7 @@ import {
 import type { Observations } from "../../src/record/index.js";
 import type { Rule } from "../../src/rule/index.js";
 import { type Figure, fittedFigure, profileFigure } from "../figures/index.js";
+import { checkCall } from "../options/index.js";
 import { showing, superscript, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
@@ -24,6 +25,7 @@ import { shownTogether } from "./shown-together.js";
  * @example fit(crowding, counts, { errors: "observation", distribution: "lognormal" });
  */
 export function fit(rule: Rule, observations: Observations, options: FitOptions): Fit {
+  checkCall("fit", arguments);
   const fitted = fitRule(rule, observations, options);
   caseLog.noteStep(
     `fit "${rule.text}" with errors: ${options.errors}, distribution: ${options.distribution ?? "normal"}`,

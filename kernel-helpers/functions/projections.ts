@@ -8,6 +8,7 @@ import {
   simulate as simulateRule,
 } from "../../src/projection/index.js";
 import type { Rule } from "../../src/rule/index.js";
+import { checkCall } from "../options/index.js";
 import { withProgress } from "../progress/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
@@ -23,6 +24,7 @@ import { shownTogether } from "./shown-together.js";
  * @example forecast(fitted, { periods: 20 });
  */
 export function forecast(fit: Fit, options: ForecastOptions): Forecast {
+  checkCall("forecast", arguments);
   const ahead = withProgress("Forecast", undefined, ({ at }) =>
     forecastFit(fit, { seed: caseLog.seed(), onProgress: at, ...options }),
   );
@@ -42,6 +44,7 @@ export function forecast(fit: Fit, options: ForecastOptions): Forecast {
  * simulate(rule, { parameters: { R: 1.1 }, initial: { N: 100 }, periods: 2 }).groups[0].states[0].central.length // 3
  */
 export function simulate(rule: Rule, options: SimulateOptions): Simulation {
+  checkCall("simulate", arguments);
   const run = withProgress("Simulation", undefined, ({ at }) =>
     simulateRule(rule, { seed: caseLog.seed(), onProgress: at, ...options }),
   );

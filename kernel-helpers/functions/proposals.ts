@@ -1,6 +1,7 @@
 import { type Proposal, type ProposeOptions, propose as tryCatalogue } from "../../src/evidence/index.js";
 import type { Observations } from "../../src/record/index.js";
 import { type Figure, figure } from "../figures/index.js";
+import { checkCall } from "../options/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { shownTogether } from "./shown-together.js";
@@ -14,6 +15,7 @@ import { shownTogether } from "./shown-together.js";
  * @example propose(counts).verdict.kind;
  */
 export function propose(observations: Observations, options: ProposeOptions = {}): Proposal {
+  checkCall("propose", arguments);
   const proposal = tryCatalogue(observations, { seed: caseLog.seed(), ...options });
   caseLog.noteStep(`tried the catalogue: ${proposal.sentence}`);
   return showing({ ...proposal }, () =>

@@ -29,6 +29,7 @@ import {
   tablesOf,
   toFrame,
 } from "../dataframe/index.js";
+import { checkCall } from "../options/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { decisionRows, decisionSentence } from "./decisions-table.js";
@@ -48,6 +49,7 @@ import { observationsBundle } from "./show-observations.js";
  * @example const readings = await readRecord("data/algae-line-3.csv");
  */
 export async function readRecord(path: string, options: ReadOptions = {}): Promise<DataFrame> {
+  checkCall("readRecord", arguments);
   const table = await readTable(path, options);
   const frame = toFrame(table);
   const found = Object.freeze([...table.source.found, ...marksFound(table.names)]);
@@ -76,6 +78,7 @@ export async function writeRecord(
   path: string,
   options: WriteOptions = {},
 ): Promise<void> {
+  checkCall("writeRecord", arguments);
   const tables = tablesOf(record);
   const named = tables.length === 1 ? withDecisions(tables[0]!.table, path, options) : tables;
   await writeTables(named, path, options);
@@ -103,6 +106,7 @@ function withDecisions(
  * const counts = observations(readings, { period: "hour", step: { every: 12, of: "hour" }, by: "flask", value: "density" });
  */
 export function observations(record: RecordLike, options: ObservationOptions): Observations {
+  checkCall("observations", arguments);
   const table = columnsOf(record);
   const made = { ...observe(table, options) };
   noteObservations(made, table.decisions ?? []);
@@ -115,6 +119,7 @@ export function observations(record: RecordLike, options: ObservationOptions): O
  * @example differences(counts, { per: "log" });
  */
 export function differences(record: Observations, options: DifferenceOptions = {}): Differences {
+  checkCall("differences", arguments);
   const made = { ...differencesOf(record, options) };
   return showing(made, () => differencesBundle(made));
 }

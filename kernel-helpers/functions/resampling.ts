@@ -10,6 +10,7 @@ import {
   type UpdatedFit,
 } from "../../src/estimate/index.js";
 import type { Observations } from "../../src/record/index.js";
+import { checkCall } from "../options/index.js";
 import { withProgress } from "../progress/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
@@ -23,6 +24,7 @@ import { shownTogether } from "./shown-together.js";
  * @example bootstrap(fit(crowding, counts, { errors: "observation" }), { resamples: 99 }).used; // 99
  */
 export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
+  checkCall("bootstrap", arguments);
   const drawn = withProgress("Refits", undefined, ({ at }) =>
     bootstrapFit(fit, { seed: caseLog.seed(), onProgress: at, ...options }),
   );
@@ -67,6 +69,7 @@ function bootstrapTable(fit: Fit, drawn: Bootstrap): Table {
  * @example gridInterval(fit(crowding, counts, { errors: "process" }), "K", { resamples: 49 }).kind; // "grid"
  */
 export function gridInterval(fit: Fit, name: string, options: GridIntervalOptions = {}): Interval {
+  checkCall("gridInterval", arguments);
   const interval = gridIntervalOf(fit, name, { seed: caseLog.seed(), ...options });
   caseLog.noteStep(`interval of ${name} in "${fit.rule.text}" by simulation at every value`);
   return showing({ ...interval }, () => shownTogether([intervalTable(name, interval)]));
@@ -93,6 +96,7 @@ function intervalTable(name: string, { level, lower, upper, note }: Interval): T
  * updateFit(fit(crowding, early, { errors: "observation" }), later).added[""]; // 2
  */
 export function updateFit(before: Fit, later: Observations): UpdatedFit {
+  checkCall("updateFit", arguments);
   const extended = extendFit(before, later);
   const added = Object.values(extended.added).reduce((sum, count) => sum + count, 0);
   caseLog.noteStep(`"${before.rule.text}" fitted again with ${added} later rows`);

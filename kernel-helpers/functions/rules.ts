@@ -5,6 +5,7 @@ import {
   type RuleCatalogue,
   recurrence as readRule,
 } from "../../src/rule/index.js";
+import { checkCall } from "../options/index.js";
 import { showing } from "../tables/index.js";
 import { catalogueTable } from "./catalogue-table.js";
 import { showRule } from "./show-rule.js";
@@ -22,6 +23,7 @@ const shown = (rule: Rule): Rule => showing({ ...rule }, () => showRule(rule));
  * @example recurrence("ΔN = r*N*(1 - N/K)").parameters; // ["r", "K"]
  */
 export function recurrence(text: string, options: RecurrenceOptions = {}): Rule {
+  checkCall("recurrence", arguments);
   return shown(readRule(text, options));
 }
 

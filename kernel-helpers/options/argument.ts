@@ -1,4 +1,4 @@
-import { isFrame, isPlain } from "./written.js";
+import { isFrame, isPlain, isPromise } from "./written.js";
 
 /** What a function may take before its options. */
 export type ArgumentKind =
@@ -17,8 +17,6 @@ export type ArgumentKind =
 
 const kindOf = (value: unknown): unknown =>
   typeof value === "object" && value !== null ? (value as { kind?: unknown }).kind : undefined;
-
-const isPromise = (value: object): boolean => typeof (value as { then?: unknown }).then === "function";
 
 /** Whether a value can be taken for one of a kind; what it holds is looked at where it is used. */
 export function isOf(kind: ArgumentKind, value: unknown): boolean {
@@ -80,7 +78,9 @@ const advice: Readonly<Partial<Record<ArgumentKind, Readonly<Record<string, stri
   },
   forecast: { "": "Call `forecast(fit, { periods: 12 })` first" },
   simulation: { rule: "Call `simulate(rule, { parameters, initial, periods: 12 })` first" },
-  record: { "": 'Read a file with `await readRecord("loan.csv")`, or give `{ month: [1, 2], owed: [900, 820] }`' },
+  record: {
+    "": 'Read a file with `await readRecord("loan.csv")`, or give `{ month: [1, 2], owed: [900, 820] }`',
+  },
   differences: { "": "Call `differences(observations)` first" },
   frame: { "": "Call `frame(record)` first" },
   table: { "": "Call `table({ title, columns, rows })` first" },

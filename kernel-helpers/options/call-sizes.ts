@@ -8,7 +8,11 @@ const size = 8;
 const count = (value: unknown, byDefault: number): number => (typeof value === "number" ? value : byDefault);
 
 const length = (value: unknown, byDefault: number): number =>
-  Array.isArray(value) ? value.length : typeof value === "object" && value !== null ? Object.keys(value).length : byDefault;
+  Array.isArray(value)
+    ? value.length
+    : typeof value === "object" && value !== null
+      ? Object.keys(value).length
+      : byDefault;
 
 const ruleOf = (subject: unknown): Rule => (subject as Partial<Fit>).rule ?? (subject as Rule);
 
@@ -23,7 +27,9 @@ export const projectedPeriods: Size = {
   bytes: (options, [subject]) => {
     const states = ruleOf(subject).states.length;
     const series = groupsOf(subject) * length(options["scenarios"], 1);
-    return size * count(options["periods"], 0) * series * (2 + states * columns(length(options["levels"], 3)));
+    return (
+      size * count(options["periods"], 0) * series * (2 + states * columns(length(options["levels"], 3)))
+    );
   },
 };
 

@@ -9,6 +9,7 @@ import {
   tooManyArgumentsError,
 } from "./errors.js";
 import type { Argument, FunctionSchema, Size } from "./function-schema.js";
+import { functions } from "./functions.js";
 import { isPlain } from "./written.js";
 
 /**
@@ -17,9 +18,11 @@ import { isPlain } from "./written.js";
  * @throws {ModelError} `argument-wrong` | `option-unknown` | `option-missing` | `option-wrong` | `option-conflict` |
  *   `option-too-large`.
  */
-export function checkCall(schema: FunctionSchema, all: ArrayLike<unknown>): void {
+export function checkCall(name: string, all: ArrayLike<unknown>): void {
+  const schema = functions.get(name)!;
   const given = withoutMapArguments(Array.from(all));
-  schema.takes.forEach((argument, place) => checkArgument(schema, argument, place, given[place]));
+  for (const [place, argument] of schema.takes.entries())
+    checkArgument(schema, argument, place, given[place]);
   const count = schema.takes.length + (schema.options === undefined ? 0 : 1);
   if (given.length > count) throw tooManyArgumentsError(schema, given[count]);
   if (schema.options !== undefined) checkOptions(schema, given);
@@ -51,7 +54,11 @@ function checkOptions(schema: FunctionSchema, given: readonly unknown[]): void {
   for (const size of sizes) checkSize(size, options, given);
 }
 
-function checkSize({ option, bytes }: Size, options: Readonly<Record<string, unknown>>, given: readonly unknown[]): void {
+function checkSize(
+  { option, bytes }: Size,
+  options: Readonly<Record<string, unknown>>,
+  given: readonly unknown[],
+): void {
   const needed = bytes(options, given);
   if (needed <= largest) return;
   const count = options[option] as number;
@@ -66,4 +73,3 @@ const roundedDown = (value: number): number => {
   const unit = 10 ** Math.floor(Math.log10(value));
   return Math.floor(value / unit) * unit;
 };
-

@@ -108,7 +108,8 @@ function accepts(kind: Kind, value: unknown): boolean {
 
 export function isWithin(range: Range, value: number): boolean {
   const { from = -Infinity, above = -Infinity, to = Infinity, below = Infinity } = range;
-  if (Number.isNaN(value) || (range.whole === true && !Number.isSafeInteger(value))) return false;
+  if (Number.isNaN(value)) return range.gaps === true;
+  if (range.whole === true && !Number.isSafeInteger(value)) return false;
   if (!Number.isFinite(value)) return range.open === true;
   return value >= from && value <= to && value > above && value < below;
 }
@@ -127,7 +128,9 @@ const checks: { readonly [Is in Kind["is"]]?: (one: Case<Is>) => Fault | undefin
     return isWithin(one.kind, value) ? undefined : wrong(one, nearNumber(one.kind, value, one.example));
   },
   text: (one) =>
-    (one.value as string).trim() === "" && one.kind.words !== undefined ? wrong(one, code(one.example)) : undefined,
+    (one.value as string).trim() === "" && one.kind.words !== undefined
+      ? wrong(one, code(one.example))
+      : undefined,
   choice: (one) => {
     const value = one.value as string;
     const { of } = one.kind;
@@ -155,9 +158,10 @@ function listFault(one: Case<"list">): Fault | undefined {
   const { kind, value, path } = one;
   const list = value as ArrayLike<unknown>;
   const { length: wanted, least = 0 } = kind;
-  if (list.length < least || (wanted !== undefined && list.length !== wanted)) return wrong(one, code(one.example));
+  if (list.length < least || (wanted !== undefined && list.length !== wanted))
+    return wrong(one, code(one.example));
   // What is in a long list or a typed array is looked at where it is used.
-  if (isNumbers(value) || list.length > 10_000) return undefined;
+  if (kind.of.kind.is === "anything" || isNumbers(value) || list.length > 10_000) return undefined;
   return first([...Array.from(list).entries()], ([i, own]) => faultOf(kind.of, own, [...path, i]));
 }
 

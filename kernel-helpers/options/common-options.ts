@@ -31,10 +31,12 @@ export const limitsByName: Value<Readonly<Record<string, readonly [number, numbe
   limits,
   "{ r: [0, 3] }",
 );
-export const firstValues: Value<InitialValues> = named(
-  either(number({}, 10), listOf(number({}, 10), "[8, 10]")),
-  "{ N: 10 }",
+/** A first value, or first values of a state with lags. */
+export const firstValue: Value<number | readonly number[]> = either(
+  number({}, 10),
+  listOf(number({}, 10), "[8, 10]"),
 );
+export const firstValues: Value<InitialValues> = named(firstValue, "{ N: 10 }");
 
 export const seed: Option<number, "optional"> = optional(
   whole(0, 1, Number.MAX_SAFE_INTEGER),

@@ -1,11 +1,12 @@
 import { ModelError } from "../../src/numeric/index.js";
+import { list } from "../wording/index.js";
 import { type ArgumentKind, adviceFor, argumentWords } from "./argument.js";
 import { faultOf } from "./check-value.js";
 import type { Fault, Path } from "./fault.js";
 import type { FunctionSchema } from "./function-schema.js";
 import type { Described, Fields } from "./option.js";
 import { meant, nearestChoice } from "./other-words.js";
-import { anyOf, inCode, mustBe } from "./words-of-kind.js";
+import { inCode, mustBe } from "./words-of-kind.js";
 import { code, given, isPlain, typed } from "./written.js";
 
 type Given = Readonly<Record<string, unknown>>;
@@ -22,13 +23,16 @@ export function optionError(fault: Fault, { name }: FunctionSchema, options: Giv
     case "both":
       return new ModelError(
         "option-conflict",
-        `${anyOf(fault.names.map(inCode), "and")}${inside(fault.path)} were both given. Give one of them.`,
+        `${list(fault.names.map(inCode))}${inside(fault.path)} were both given. Give one of them.`,
         { options: fault.names },
       );
   }
 }
 
-function wrongError({ path, must, value, instead }: Extract<Fault, { kind: "wrong" }>, options: Given): ModelError {
+function wrongError(
+  { path, must, value, instead }: Extract<Fault, { kind: "wrong" }>,
+  options: Given,
+): ModelError {
   return new ModelError(
     "option-wrong",
     `Option ${inCode(placeOf(path))} must be ${must}; ${given(value)} was given.${write(options, path, instead)}`,
@@ -43,13 +47,13 @@ function unknownError(
 ): ModelError {
   const names = Object.keys(known);
   const near = meant(name, names);
-  const hint = near.length === 0 ? "" : ` Did you mean ${anyOf(near.map(inCode))}?`;
+  const hint = near.length === 0 ? "" : ` Did you mean ${list(near.map(inCode), "or")}?`;
   const renamed = near.length === 0 ? "" : writeRenamed(options, path, name, near[0]!, known);
   const what = path.length === 0 ? `option ${inCode(name)}` : `field ${inCode(name)}${inside(path)}`;
   const taker = path.length === 0 ? inCode(called) : inCode(placeOf(path));
   return new ModelError(
     "option-unknown",
-    `Unknown ${what}.${hint}${renamed} ${taker} takes ${anyOf(names.map(inCode), "and")}.`,
+    `Unknown ${what}.${hint}${renamed} ${taker} takes ${list(names.map(inCode))}.`,
     { option: [...path, name].join("."), value, known: names, nearest: near },
   );
 }
@@ -62,8 +66,12 @@ function missingError(
   const names = Object.keys(fields);
   const name = names[0]!;
   const field = fields[name]!;
-  const which = names.length === 1 ? `the option ${inCode(name)}` : `one of the options ${anyOf(names.map(inCode))}`;
-  const needs = path.length === 0 ? `${inCode(called)} needs ${which}` : `Option ${inCode(placeOf(path))} lacks ${anyOf(names.map(inCode))}`;
+  const which =
+    names.length === 1 ? `the option ${inCode(name)}` : `one of the options ${list(names.map(inCode), "or")}`;
+  const needs =
+    path.length === 0
+      ? `${inCode(called)} needs ${which}`
+      : `Option ${inCode(placeOf(path))} lacks ${list(names.map(inCode), "or")}`;
   const must = names.length === 1 ? `, ${mustBe(field.kind)}` : "";
   return new ModelError(
     "option-missing",
@@ -82,14 +90,22 @@ export function argumentError(
   const which = schema.takes.length > 1 ? ` as its ${ordinals[place]} argument` : "";
   return new ModelError(
     "argument-wrong",
-    `${inCode(schema.name)} needs ${anyOf(wanted.map((kind) => argumentWords[kind]))}${which}; ${given(value)} was given. ${adviceFor(wanted, value)}: ${inCode(schema.example)}.`,
+    `${inCode(schema.name)} needs ${list(
+      wanted.map((kind) => argumentWords[kind]),
+      "or",
+    )}${which}; ${given(value)} was given. ${adviceFor(wanted, value)}: ${inCode(schema.example)}.`,
     { argument: schema.takes[place]?.name, place: place + 1 },
   );
 }
 
 const ordinals = ["first", "second", "third", "fourth"];
 
-export function plainArgumentError(schema: FunctionSchema, name: string, wanted: Described, value: unknown): ModelError {
+export function plainArgumentError(
+  schema: FunctionSchema,
+  name: string,
+  wanted: Described,
+  value: unknown,
+): ModelError {
   return new ModelError(
     "argument-wrong",
     `The ${inCode(name)} of ${inCode(schema.name)} must be ${mustBe(wanted.kind)}; ${given(value)} was given. Write ${inCode(schema.example)}.`,
@@ -119,7 +135,10 @@ const gigabyte = 1e9;
 
 /** @param most - largest value that fits. */
 export function tooLargeError(option: string, value: number, bytes: number, most: number): ModelError {
-  const size = bytes >= 1000 * gigabyte ? `${Math.round(bytes / gigabyte / 1000)} TB` : `${Math.round(bytes / gigabyte)} GB`;
+  const size =
+    bytes >= 1000 * gigabyte
+      ? `${Math.round(bytes / gigabyte / 1000)} TB`
+      : `${Math.round(bytes / gigabyte)} GB`;
   return new ModelError(
     "option-too-large",
     `Option ${inCode(option)} is too large: ${value} would need about ${size} of memory, and a call may use 1 GB. Write ${inCode(`${option}: ${most}`)} or less.`,
@@ -132,7 +151,8 @@ const inside = (path: Path): string => (path.length === 0 ? "" : ` in option ${i
 /** "noise.N.sd", "levels[1]". */
 function placeOf(path: Path): string {
   return path.reduce<string>(
-    (place, step) => (typeof step === "number" ? `${place}[${step}]` : place === "" ? step : `${place}.${step}`),
+    (place, step) =>
+      typeof step === "number" ? `${place}[${step}]` : place === "" ? step : `${place}.${step}`,
     "",
   );
 }
@@ -146,7 +166,10 @@ function write(options: Given, path: Path, instead: unknown): string {
 
 /** The same with a field under the name that was meant. */
 function writeRenamed(options: Given, path: Path, name: string, meantName: string, known: Fields): string {
-  const { [name]: value, ...others } = path.reduce<unknown>((own, step) => (own as Given)[step], options) as Given;
+  const { [name]: value, ...others } = path.reduce<unknown>(
+    (own, step) => (own as Given)[step],
+    options,
+  ) as Given;
   const own = translated(name, value, known[meantName]!);
   return path.length === 0
     ? write({}, [meantName], own)

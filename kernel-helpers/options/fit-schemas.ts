@@ -1,4 +1,5 @@
 import type { BootstrapOptions, FitOptions, GridIntervalOptions } from "../../src/estimate/index.js";
+import { keptResamples } from "./call-sizes.js";
 import {
   firstValues,
   fit as fitted,
@@ -12,7 +13,6 @@ import {
   valuesByName,
 } from "./common-options.js";
 import type { FunctionSchema } from "./function-schema.js";
-import { keptResamples } from "./call-sizes.js";
 import { flag, named, number, oneOf, optional, required, type Schema, text, whole } from "./option.js";
 
 export const fitOptions: Schema<FitOptions> = {
@@ -69,7 +69,7 @@ export const fitOptions: Schema<FitOptions> = {
   ),
 };
 
-export const fitSchema: FunctionSchema = {
+const fitSchema: FunctionSchema = {
   name: "fit",
   takes: [rule, observations],
   options: { fields: fitOptions },
@@ -82,11 +82,7 @@ const bootstrapOptions: Schema<BootstrapOptions> = {
     "Errors of the simulated records: normal, the fit's own residuals one by one, or in blocks of neighbours",
     '"parametric"',
   ),
-  block: optional(
-    whole(1, 4),
-    "Length of a block",
-    "the cube root of the number of values, rounded up",
-  ),
+  block: optional(whole(1, 4), "Length of a block", "the cube root of the number of values, rounded up"),
   resamples: optional(whole(20, 999), "Refits a group", 999),
   seed,
   level: optional(intervalLevel, "Confidence level of the intervals, between 0 and 1", "that of the fit"),
@@ -94,7 +90,7 @@ const bootstrapOptions: Schema<BootstrapOptions> = {
   signal,
 };
 
-export const bootstrapSchema: FunctionSchema = {
+const bootstrapSchema: FunctionSchema = {
   name: "bootstrap",
   takes: [fitted],
   options: { fields: bootstrapOptions },
@@ -111,19 +107,33 @@ const gridIntervalOptions: Schema<GridIntervalOptions> = {
   signal,
 };
 
-export const gridIntervalSchema: FunctionSchema = {
+const gridIntervalSchema: FunctionSchema = {
   name: "gridInterval",
   takes: [fitted, { name: "name", takes: text("r", "the name of a parameter of the fit") }],
   options: { fields: gridIntervalOptions },
   example: 'gridInterval(fit, "r", { resamples: 399 })',
 };
 
-export const updateFitSchema: FunctionSchema = {
+const updateFitSchema: FunctionSchema = {
   name: "updateFit",
   takes: [fitted, observations],
   example: "updateFit(fit, laterObservations)",
 };
 
-export const estimatesSchema: FunctionSchema = { name: "estimates", takes: [fitted], example: "estimates(fit)" };
-export const pointsSchema: FunctionSchema = { name: "points", takes: [fitted], example: "points(fit)" };
-export const summarySchema: FunctionSchema = { name: "summary", takes: [fitted], example: "summary(fit)" };
+const estimatesSchema: FunctionSchema = {
+  name: "estimates",
+  takes: [fitted],
+  example: "estimates(fit)",
+};
+const pointsSchema: FunctionSchema = { name: "points", takes: [fitted], example: "points(fit)" };
+const summarySchema: FunctionSchema = { name: "summary", takes: [fitted], example: "summary(fit)" };
+
+export const fitSchemas: readonly FunctionSchema[] = [
+  fitSchema,
+  bootstrapSchema,
+  gridIntervalSchema,
+  updateFitSchema,
+  estimatesSchema,
+  pointsSchema,
+  summarySchema,
+];

@@ -5,8 +5,10 @@ export interface Range {
   readonly to?: number;
   readonly below?: number;
   readonly whole?: boolean;
-  /** Whether an end may be infinite. */
+  /** Whether it may be infinite. */
   readonly open?: boolean;
+  /** Whether it may be NaN, where that marks a missing value. */
+  readonly gaps?: boolean;
 }
 
 /** What a value may be, as data: the check, the help and the tests read the same. */
@@ -74,10 +76,7 @@ type NeedOf<T, K> = T extends unknown
  * compiler refuses a schema that does not agree with its type.
  */
 export type Schema<T> = {
-  readonly [K in KeyOf<T>]: Option<
-    At<T, K>,
-    "optional" extends NeedOf<T, K> ? "optional" : "required"
-  >;
+  readonly [K in KeyOf<T>]: Option<At<T, K>, "optional" extends NeedOf<T, K> ? "optional" : "required">;
 };
 
 /** An option that has no default. */
@@ -86,8 +85,16 @@ export function required<T>(value: Value<T>, says: string): Option<T, "required"
 }
 
 /** An option that may be left out; what then holds is said at the end of its sentence. */
-export function optional<T>(value: Value<T>, says: string, byDefault?: string | number): Option<T, "optional"> {
-  return { ...value, need: "optional", says: byDefault === undefined ? `${says}.` : `${says}; default ${byDefault}.` };
+export function optional<T>(
+  value: Value<T>,
+  says: string,
+  byDefault?: string | number,
+): Option<T, "optional"> {
+  return {
+    ...value,
+    need: "optional",
+    says: byDefault === undefined ? `${says}.` : `${says}; default ${byDefault}.`,
+  };
 }
 
 export const number = (range: Range, example: number | string): Value<number> => ({
@@ -117,8 +124,8 @@ export const listOf = <T>(of: Value<T>, example = `[${of.example}]`, least = 1):
 });
 
 /** Numbers in an array or a typed array. */
-export const numbers = (example: string): Value<ArrayLike<number>> => ({
-  kind: { is: "list", of: number({ open: true }, 1) },
+export const numbers = (example: string, least = 0): Value<ArrayLike<number>> => ({
+  kind: { is: "list", of: number({ open: true, gaps: true }, 1), least },
   example,
 });
 
@@ -150,4 +157,10 @@ export const either = <A, B>(first: Value<A>, second: Value<B>): Value<A | B> =>
 export const func = <T>(example: string): Value<T> => ({ kind: { is: "function" }, example });
 
 /** Another result of this package. */
-export const resultOf = <T>(of: string, example: string): Value<T> => ({ kind: { is: "result", of }, example });
+export const resultOf = <T>(of: string, example: string): Value<T> => ({
+  kind: { is: "result", of },
+  example,
+});
+
+/** A value that is looked at where it is used. */
+export const anything = <T>(example: string): Value<T> => ({ kind: { is: "anything" }, example });

@@ -12,8 +12,10 @@ const otherNames: Readonly<Record<string, string>> = {
   level: "alpha confidence confidenceLevel conf ci significance coverage probability",
   levels: "level bands alpha confidence ci quantiles coverage",
   periods: "horizon steps n h ahead length duration end until periodsAhead",
-  paths: "draws lots runs simulations sims samples nsim trials trajectories replications iterations n resamples",
-  resamples: "draws refits lots replications iterations reps nboot bootstraps samples nsim B n paths simulations",
+  paths:
+    "draws lots runs simulations sims samples nsim trials trajectories replications iterations n resamples",
+  resamples:
+    "draws refits lots replications iterations reps nboot bootstraps samples nsim B n paths simulations",
   parameters: "constants constant params parameter unknowns coefficients theta values",
   fixed: "constants constant held hold known parameters",
   vary: "setting unknown unknowns constant constants parameter param variable over",
@@ -188,7 +190,10 @@ function likeliest(
   const near = nearestNames(word, known);
   if (byWord.length > 0 || near.length > 0) return [...new Set([...byWord, ...near])].slice(0, 3);
   const all = known.flatMap((each) => listed(others[each]).map((other) => ({ each, other })));
-  const [likeWord] = nearestNames(typed, all.map(({ other }) => other).filter((other) => other.length > 3));
+  const [likeWord] = nearestNames(
+    typed,
+    all.map(({ other }) => other).filter((other) => other.length > 3),
+  );
   if (likeWord !== undefined) return all.filter(({ other }) => other === likeWord).map(({ each }) => each);
   return known.filter((each) => each.length > 3 && typed.includes(plain(each)));
 }

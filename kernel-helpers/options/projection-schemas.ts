@@ -74,12 +74,19 @@ const error: Value<Noise> = {
   example: '{ distribution: "lognormal", sd: 0.1 }',
 };
 
-const namedSd = required(either(number({ from: 0 }, 0.1), text("s")), "Standard deviation a period: a number or the name of a parameter");
+const namedSd = required(
+  either(number({ from: 0 }, 0.1), text("s")),
+  "Standard deviation a period: a number or the name of a parameter",
+);
 
 /** Random change of a rule, whose standard deviation may be one of its parameters. */
 export const processNoise: Value<Readonly<Record<string, ProcessNoise>>> = named(
   {
-    kind: { is: "variants", by: "distribution", of: { normal: { sd: namedSd, centre }, lognormal: { sd: namedSd, centre } } },
+    kind: {
+      is: "variants",
+      by: "distribution",
+      of: { normal: { sd: namedSd, centre }, lognormal: { sd: namedSd, centre } },
+    },
     example: '{ distribution: "lognormal", sd: 0.1 }',
   },
   noiseExample,
@@ -99,8 +106,8 @@ export const noise: Value<Readonly<Record<string, Noise | ProcessNoise>>> = name
 
 const watched: Schema<Watch> = {
   state: optional(text("N"), "Name of the state", "the only one"),
-  value: required(anyNumber, "In the state's unit"),
-  direction: required(oneOf("rising", "falling"), "From which side the level is reached"),
+  risesTo: optional(anyNumber, "Level that the state rises to, from below, in its unit"),
+  fallsTo: optional(anyNumber, "Level that the state falls to, from above, in its unit"),
 };
 
 const levels = optional(
@@ -132,7 +139,7 @@ const forecastOptions: Schema<ForecastOptions> = {
   signal,
 };
 
-export const forecastSchema: FunctionSchema = {
+const forecastSchema: FunctionSchema = {
   name: "forecast",
   takes: [fit],
   options: { fields: forecastOptions },
@@ -168,10 +175,12 @@ const simulateOptions: Schema<SimulateOptions> = {
   signal,
 };
 
-export const simulateSchema: FunctionSchema = {
+const simulateSchema: FunctionSchema = {
   name: "simulate",
   takes: [rule],
   options: { fields: simulateOptions },
   example: "simulate(rule, { parameters: { R: 1.1 }, initial: { N: 100 }, periods: 12 })",
   sizes: [projectedPeriods, projectedPaths],
 };
+
+export const projectionSchemas: readonly FunctionSchema[] = [forecastSchema, simulateSchema];

@@ -1,10 +1,5 @@
+import { list } from "../wording/index.js";
 import type { Kind, Range } from "./option.js";
-
-/** "a, b or c". */
-export function anyOf(items: readonly string[], last = "or"): string {
-  if (items.length <= 1) return items[0] ?? "";
-  return `${items.slice(0, -1).join(", ")} ${last} ${items[items.length - 1]}`;
-}
 
 export const inCode = (name: string): string => `\`${name}\``;
 
@@ -28,19 +23,22 @@ export function mustBe(kind: Kind): string {
     case "anything":
       return "a value";
     case "choice":
-      return anyOf(quoted(kind.of));
+      return list(quoted(kind.of), "or");
     case "list":
       return listWords(kind);
     case "named":
       return `an object that holds, by name, ${mustBe(kind.of.kind)}`;
     case "shape":
-      return `an object with ${anyOf(Object.keys(kind.fields).map(inCode), "and")}`;
+      return `an object with ${list(Object.keys(kind.fields).map(inCode))}`;
     case "variants":
-      return `an object with ${inCode(kind.by)}: ${anyOf(quoted(Object.keys(kind.of)))}`;
+      return `an object with ${inCode(kind.by)}: ${list(quoted(Object.keys(kind.of)), "or")}`;
     case "measures":
-      return `an object with one of ${anyOf(Object.keys(kind.of).map(inCode))}`;
+      return `an object with one of ${list(Object.keys(kind.of).map(inCode), "or")}`;
     case "either":
-      return anyOf(kind.of.map((each) => mustBe(each.kind)));
+      return list(
+        kind.of.map((each) => mustBe(each.kind)),
+        "or",
+      );
     case "result":
       return `a ${kind.of}`;
   }

@@ -55,7 +55,8 @@ function literal(value: unknown): string {
   throw new TypeError("no literal");
 }
 
-const key = (name: string): string => (/^[\p{L}_$][\p{L}\p{N}_$]*$|^\d+$/u.test(name) ? name : JSON.stringify(name));
+const key = (name: string): string =>
+  /^[\p{L}_$][\p{L}\p{N}_$]*$|^\d+$/u.test(name) ? name : JSON.stringify(name);
 
 /** Kinds of results in words. */
 const results: Readonly<Record<string, string>> = {
@@ -68,22 +69,23 @@ const results: Readonly<Record<string, string>> = {
 export function given(value: unknown): string {
   if (value === undefined) return "nothing";
   if (typeof value === "function") return "a function";
-  if (typeof value !== "object" || value === null) return cut(typed(value) ?? JSON.stringify(value) ?? typeof value);
-  if (typeof (value as { then?: unknown }).then === "function") return "a promise";
+  if (typeof value !== "object" || value === null) return cut(typed(value) ?? String(value));
+  if (isPromise(value)) return "a promise";
   if (isFrame(value)) return "a DataFrame";
-  const { kind } = value as { kind?: unknown };
-  if (typeof kind === "string" && !isPlainRecord(value)) return results[kind] ?? withArticle(kind);
-  return typed(value) ?? (Array.isArray(value) || isNumbers(value) ? `a list of ${value.length}` : "an object");
+  const { kind, length } = value as { kind?: unknown; length?: unknown };
+  // What an analyst typed as { kind: "gaussian" } is short; a result is not.
+  const short = typed(value);
+  if (short !== undefined) return short;
+  if (typeof kind === "string") return results[kind] ?? withArticle(kind);
+  return typeof length === "number" ? `a list of ${length}` : "an object";
 }
+
+export const isPromise = (value: object): boolean => typeof (value as { then?: unknown }).then === "function";
 
 const cut = (text: string): string => (text.length > 60 ? `${text.slice(0, 57)}...` : text);
 
-const withArticle = (kind: string): string => `${/^[aeiou]/.test(kind) ? "an" : "a"} ${kind.replace(/-/g, " ")}`;
-
-/** A result has more than a kind; what an analyst typed as `{ kind: "gaussian" }` is short and plain. */
-function isPlainRecord(value: object): boolean {
-  return isPlain(value) && !Object.isFrozen(value) && typed(value) !== undefined;
-}
+const withArticle = (kind: string): string =>
+  `${/^[aeiou]/.test(kind) ? "an" : "a"} ${kind.replace(/-/g, " ")}`;
 
 /** Recognised by shape, because a frame may come from another copy of its library. */
 export function isFrame(value: unknown): boolean {

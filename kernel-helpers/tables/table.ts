@@ -1,3 +1,4 @@
+import { checkCall } from "../options/index.js";
 import { type NumberFormat, numberFormat } from "../wording/index.js";
 import { columnRepeated, noColumns, unknownColumnKind } from "./refusals.js";
 import { showing } from "./show-itself.js";
@@ -75,6 +76,7 @@ export interface TableOptions {
  * @example table({ title: "Levels", columns: [{ key: "n", label: "Week", kind: "integer" }], rows: [{ n: 1 }] });
  */
 export function table(options: TableOptions): Table {
+  checkCall("table", arguments);
   checkColumns(options.columns, options.title);
   const made: Table = {
     kind: "table",

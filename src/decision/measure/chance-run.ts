@@ -33,6 +33,7 @@ export function chanceRun(standing: Standing): ChanceRun {
   const source = fit && unknownsDraw(fit, standing.fitGround!.group);
   const seeds = blockStreams(randomStream(standing.seed), paths);
   return (listener, setting, value) => {
+    standing.tick();
     const ground = setting === undefined ? standing.ground : setting.at(value!);
     const streams = seeds.map((seed) => seed.jump());
     const drawn: RunStarts =

@@ -51,11 +51,16 @@ export function windowOf(measure: Measure, ahead: number): readonly [number, num
 function columnReader(standing: Standing, name: string): (ground: Ground) => readonly number[] {
   const { rule } = standing;
   const state = rule.states.indexOf(name);
-  if (state >= 0) return (ground) => centralPath(ground).values[state]!;
+  if (state >= 0)
+    return (ground) => {
+      standing.tick();
+      return centralPath(ground).values[state]!;
+    };
   const place = rule.quantities.indexOf(name);
   if (place < 0) throw refuseMeasureName(name, [...rule.states, ...rule.quantities]);
   const quantities = quantitiesAt(rule);
   return (ground) => {
+    standing.tick();
     const { parameters, inputs, from } = ground;
     const state = ground.initial.slice();
     const values = [Number.NaN];

@@ -1,5 +1,5 @@
 import type { Fit } from "../../estimate/index.js";
-import { randomStream } from "../../numeric/index.js";
+import { type RunHooks, randomStream, ticker } from "../../numeric/index.js";
 import { isProbability, type Measure, measureWords } from "../measure/measure.js";
 import { measureReader } from "../measure/read-measure.js";
 import {
@@ -14,7 +14,7 @@ import { narrowingAt } from "./narrowing.js";
 import { separationAt } from "./separation.js";
 
 /** Options of `nextReading`. */
-export interface NextReadingOptions {
+export interface NextReadingOptions extends RunHooks {
   /** Periods beyond the record up to which a reading could be taken, and up to which the answer looks. */
   readonly periods: number;
   /** Times at which it could be taken, in the unit of the period column; default every period from the first on. */
@@ -86,7 +86,10 @@ export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOpti
   });
   const separating = answer === undefined;
   const look = separating ? separationLook(rivals, seed) : narrowingLook(rivals[0]!, answer, seed);
-  const choices = candidates(rivals, options.values).map(({ time, rows }): ReadingChoice => {
+  const times = candidates(rivals, options.values);
+  const tick = ticker(options, times.length);
+  const choices = times.map(({ time, rows }): ReadingChoice => {
+    tick();
     const { gain, error, telling } = look(rows);
     const price = cost(time);
     return { time, gain, error, telling, cost: price, worth: gain / price };

@@ -1,5 +1,6 @@
 import { type InitialValues, initialVector, parametersBySlot } from "../../dynamics/index.js";
 import type { Fit } from "../../estimate/index.js";
+import { type RunHooks, type Tick, ticker } from "../../numeric/index.js";
 import {
   type FitGround,
   fitGround,
@@ -15,7 +16,7 @@ import type { MeasureUnits } from "../measure/measure.js";
 import { refuseGroup } from "../refusals.js";
 
 /** What a decision is worked out from, beside the rule or fit itself. */
-export interface StandingOptions {
+export interface StandingOptions extends RunHooks {
   /** Whole periods ahead. */
   readonly periods: number;
   /** By input: its plan. For a fit the first period ahead comes first, for a rule period 0. */
@@ -51,9 +52,15 @@ export interface Standing extends MeasureUnits {
   readonly plans: InputPlans;
   readonly paths: number;
   readonly seed: number;
+  /** Called before each run of the rule. */
+  readonly tick: Tick;
   /** The ground under other plans of inputs. */
   readonly planned: (plans: InputPlans) => Ground;
 }
+
+/** Runs that an answer takes, roughly: a place in the range each, and for a fit some at every draw of its parameters. */
+const runsOfRule = 100;
+const runsOfFit = 5000;
 
 /** Whether a subject is a fit. */
 export const isFit = (subject: Fit | Rule): subject is Fit => subject.kind === "fit";
@@ -87,6 +94,7 @@ function fitStanding(fit: Fit, options: StandingOptions): Standing {
     plans: options.inputs ?? {},
     paths: options.paths ?? 2000,
     seed: options.seed ?? 1,
+    tick: ticker(options, runsOfFit),
     planned,
     unitOf: (name) => {
       const state = stateOf(name);
@@ -116,6 +124,7 @@ function ruleStanding(rule: Rule, options: StandingOptions): Standing {
     plans: options.inputs ?? {},
     paths: options.paths ?? 2000,
     seed: options.seed ?? 1,
+    tick: ticker(options, runsOfRule),
     planned,
     unitOf: (name) => rule.units[stateOf(name)] ?? "",
     periodUnit: options.period ?? "period",

@@ -1,0 +1,223 @@
+import type {
+  NextReadingOptions,
+  OptimizeOptions,
+  SensitivityOptions,
+  SolveOptions,
+  TimeToReachOptions,
+  TradeoffOptions,
+} from "../../src/decision/index.js";
+import { projectedPaths, steppedPeriods } from "./call-sizes.js";
+import {
+  anyNumber,
+  firstValues,
+  intervalLevel,
+  onProgress,
+  pair,
+  positive,
+  ruleOrFit,
+  seed,
+  signal,
+  valuesByName,
+} from "./common-options.js";
+import type { FunctionSchema } from "./function-schema.js";
+import { measure, target } from "./measure-schemas.js";
+import {
+  either,
+  flag,
+  func,
+  listOf,
+  named,
+  number,
+  optional,
+  required,
+  type Schema,
+  shapeOf,
+  text,
+  whole,
+} from "./option.js";
+import { noise, plans } from "./projection-schemas.js";
+
+type Shared = Omit<SensitivityOptions, "answer" | "vary">;
+
+const shared: Schema<Shared> = {
+  periods: required(whole(1, 24), "Whole periods ahead"),
+  inputs: optional(
+    plans,
+    "By input: its plan; for a fit the first period ahead comes first, for a rule period 0",
+  ),
+  group: optional(text("A", "the name of a group"), "Of a fit with several groups: which one"),
+  parameters: optional(valuesByName, "Of a rule: its parameters by name"),
+  initial: optional(firstValues, "Of a rule: its first values by state"),
+  noise: optional(noise, "Of a rule: random change by state, for probabilities"),
+  period: optional(text("month"), "Of a rule: what a period is called", '"period"'),
+  startsAt: optional(number({ whole: true }, 0), "Of a rule: what the present period is numbered", 0),
+  paths: optional(whole(1, 2000), "Random paths for probabilities and margins", 2000),
+  seed,
+  onProgress,
+  signal,
+};
+
+const sizes = [steppedPeriods, projectedPaths];
+
+const vary = required(
+  text("payment", "the name of a parameter, of a first value or of an input"),
+  'What is varied: a parameter, a first value such as "N[0]", or an input, whose usual level is set',
+);
+
+const solveOptions: Schema<SolveOptions> = {
+  ...shared,
+  vary,
+  until: required(target, "What is to be met: a measure that `is` a value, is `atMost` it or `atLeast` it"),
+  range: optional(
+    pair,
+    "Lowest and highest value looked at",
+    "a hundredth to a hundred times the present one, within its bounds",
+  ),
+  multiple: optional(
+    positive,
+    "The value comes in multiples of this (0.01 for money, 1 for pieces), rounded to the side that meets the target",
+  ),
+  level: intervalLevel,
+};
+
+const solveForSchema: FunctionSchema = {
+  name: "solveFor",
+  takes: [ruleOrFit],
+  options: { fields: solveOptions },
+  example: 'solveFor(fit, { vary: "payment", until: { time: "owed", fallsTo: 0, is: 24 }, periods: 36 })',
+  sizes,
+};
+
+const optimizeOptions: Schema<OptimizeOptions> = {
+  ...shared,
+  vary,
+  range: required(pair, "Lowest and highest value looked at"),
+  maximize: optional(measure, "Measure that is to be as large as can be; give this or `minimize`"),
+  minimize: optional(measure, "Measure that is to be as small as can be; give this or `maximize`"),
+  level: intervalLevel,
+};
+
+const optimizeSchema: FunctionSchema = {
+  name: "optimize",
+  takes: [ruleOrFit],
+  options: { fields: optimizeOptions, oneOf: [["maximize", "minimize"]] },
+  example: 'optimize(fit, { vary: "h", range: [0, 1], maximize: { total: "catch" }, periods: 20 })',
+  sizes,
+};
+
+const sensitivityOptions: Schema<SensitivityOptions> = {
+  ...shared,
+  answer: required(measure, "Measure whose change is wanted"),
+  vary: optional(
+    listOf(text("r", "the name of a parameter, of a first value or of an input"), '["r", "K"]'),
+    "Parameters, first values and inputs to move",
+    "what the fit estimates, or all parameters of a rule",
+  ),
+};
+
+const sensitivitySchema: FunctionSchema = {
+  name: "sensitivity",
+  takes: [ruleOrFit],
+  options: { fields: sensitivityOptions },
+  example: 'sensitivity(fit, { answer: { time: "N", risesTo: 120 }, periods: 20 })',
+  sizes,
+};
+
+const ends = {
+  from: required(anyNumber, "First value"),
+  to: required(anyNumber, "Last value"),
+};
+
+const tradeoffOptions: Schema<TradeoffOptions> = {
+  ...shared,
+  vary,
+  values: required(
+    either(
+      listOf(anyNumber, "[10, 20, 30]"),
+      shapeOf<{ readonly from: number; readonly to: number; readonly count: number }>(
+        { ...ends, count: required(whole(1, 5, 100_000), "How many values, ends included") },
+        "{ from: 10, to: 30, count: 5 }",
+      ),
+    ),
+    "Values to look at: a list, or two ends with how many",
+  ),
+  answers: required(
+    named(measure, '{ clear: { time: "owed", fallsTo: 0 } }'),
+    "What each value brings: measures by the name they are shown under",
+  ),
+};
+
+const tradeoffSchema: FunctionSchema = {
+  name: "tradeoff",
+  takes: [ruleOrFit],
+  options: { fields: tradeoffOptions },
+  example: 'tradeoff(fit, { vary: "h", values: [0.1, 0.2], answers: { low: { lowest: "B" } }, periods: 20 })',
+  sizes,
+};
+
+const timeToReachOptions: Schema<TimeToReachOptions> = {
+  state: optional(text("N", "the name of a state"), "Name of the state", "the only one"),
+  risesTo: optional(anyNumber, "Level that the state rises to, from below, in its unit"),
+  fallsTo: optional(anyNumber, "Level that the state falls to, from above, in its unit"),
+  level: intervalLevel,
+  newUnit: optional(
+    flag,
+    "Whether to say as well when a new unit would get there, the variance between units added; from three groups on",
+    "false",
+  ),
+};
+
+const timeToReachSchema: FunctionSchema = {
+  name: "timeToReach",
+  takes: [{ name: "ahead", takes: ["forecast", "simulation"] }],
+  options: { fields: timeToReachOptions, oneOf: [["risesTo", "fallsTo"]] },
+  example: 'timeToReach(forecast(fit, { periods: 24 }), { state: "owed", fallsTo: 0 })',
+};
+
+const nextReadingOptions: Schema<NextReadingOptions> = {
+  periods: required(
+    whole(1, 10),
+    "Periods beyond the record up to which a reading could be taken, and up to which the answer looks",
+  ),
+  values: optional(
+    either(
+      listOf(anyNumber, "[21, 24]"),
+      shapeOf<{ readonly from: number; readonly to: number }>(ends, "{ from: 20, to: 30 }"),
+    ),
+    "Times at which it could be taken, in the unit of the period column: a list, or two ends",
+    "every period from the first on",
+  ),
+  answer: optional(measure, "Measure whose margin is to be narrowed; needed for a single fit"),
+  state: optional(text("N", "the name of a state"), "What is read", "the first state"),
+  replicates: optional(
+    whole(1, 1, 1_000_000),
+    "Readings taken at the same time; they count where the error is one of observation",
+    1,
+  ),
+  cost: optional(
+    func<(time: number) => number>("(time) => 10 + time"),
+    "Cost of a reading at a time, in any unit; the gain is then weighed by it",
+    "the same everywhere",
+  ),
+  group: shared.group,
+  paths: optional(whole(1, 1000), "Parameter values drawn", 1000),
+  seed,
+  onProgress,
+  signal,
+};
+
+const nextReadingSchema: FunctionSchema = {
+  name: "nextReading",
+  takes: [{ name: "fits", takes: ["fit", "fits"] }],
+  options: { fields: nextReadingOptions },
+  example: 'nextReading(fit, { answer: { parameter: "K" }, periods: 10 })',
+};
+
+export const decisionSchemas: readonly FunctionSchema[] = [
+  solveForSchema,
+  optimizeSchema,
+  sensitivitySchema,
+  tradeoffSchema,
+  timeToReachSchema,
+  nextReadingSchema,
+];

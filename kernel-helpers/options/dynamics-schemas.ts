@@ -1,0 +1,320 @@
+import type {
+  AttractorOptions,
+  BasinsOptions,
+  BifurcationsOptions,
+  ClosedFormOptions,
+  CobwebOptions,
+  CyclesOptions,
+  EquilibriaOptions,
+  ExactTrajectoryOptions,
+  ExactValue,
+  HeldSetting,
+  LyapunovExponentOptions,
+  PredictionHorizonOptions,
+  SearchRange,
+  TrajectoryOptions,
+} from "../../src/dynamics/index.js";
+import { steppedPeriods } from "./call-sizes.js";
+import {
+  anyNumber,
+  firstValues,
+  intervalLevel,
+  onProgress,
+  pair,
+  positive,
+  ruleOrFit,
+  signal,
+  valuesByName,
+} from "./common-options.js";
+import type { FunctionSchema } from "./function-schema.js";
+import {
+  either,
+  listOf,
+  named,
+  number,
+  numbers,
+  optional,
+  required,
+  type Schema,
+  shapeOf,
+  text,
+  type Value,
+  whole,
+} from "./option.js";
+
+const takes = [ruleOrFit];
+
+const held: Schema<HeldSetting> = {
+  parameters: optional(
+    valuesByName,
+    "Parameters by name; those that the rule holds fixed may be left out, and those of a fit are its estimates",
+  ),
+  inputs: optional(valuesByName, "By input: the value at which it stays"),
+};
+
+const initial = optional(
+  firstValues,
+  "First values by state, with lags a list, oldest first; those that the rule states or the fit estimates may be left out",
+);
+
+const trajectoryOptions: Schema<TrajectoryOptions> = {
+  parameters: held.parameters,
+  initial,
+  periods: required(whole(0, 12), "Whole periods to run"),
+  inputs: optional(
+    named(either(anyNumber, numbers("[300, 300, 450]")), "{ payment: 300 }"),
+    "By input: one number, or its values by period, period 0 first",
+  ),
+  startsAt: optional(number({ whole: true }, 0), "Number of the period of the first value", 0),
+};
+
+const trajectorySchema: FunctionSchema = {
+  name: "trajectory",
+  takes,
+  options: { fields: trajectoryOptions },
+  example: "trajectory(rule, { parameters: { R: 1.1 }, initial: { N: 100 }, periods: 12 })",
+  sizes: [steppedPeriods],
+};
+
+const exactly: Value<ExactValue> = either(
+  either(anyNumber, text("1/3", 'a number or a text such as "1/3"')),
+  { kind: { is: "bigint" }, example: "1n" } as Value<bigint>,
+);
+
+const exactTrajectoryOptions: Schema<ExactTrajectoryOptions> = {
+  parameters: optional(
+    named(exactly, '{ r: "1/3" }'),
+    'Parameters by name: numbers, read as the decimals they print as, or texts such as "1/3"',
+  ),
+  initial: required(
+    named(either(exactly, listOf(exactly)), "{ N: 10 }"),
+    "First values by state, or lists of them, oldest first, where the rule reads past values",
+  ),
+  inputs: optional(
+    named(listOf(exactly), "{ payment: [300, 300] }"),
+    "By input: its values by period, period 0 first",
+  ),
+  periods: required(whole(0, 12), "Whole periods to run"),
+};
+
+const exactTrajectorySchema: FunctionSchema = {
+  name: "exactTrajectory",
+  takes,
+  options: { fields: exactTrajectoryOptions },
+  example: 'exactTrajectory(rule, { parameters: { R: "11/10" }, initial: { N: 100 }, periods: 12 })',
+  sizes: [steppedPeriods],
+};
+
+const closedFormOptions: Schema<ClosedFormOptions> = {
+  ...held,
+  initial,
+  digits: optional(whole(1, 10, 15), "Significant digits that `guaranteed` asks for", 10),
+};
+
+const closedFormSchema: FunctionSchema = {
+  name: "closedForm",
+  takes,
+  options: { fields: closedFormOptions },
+  example: "closedForm(rule, { parameters: { a: 0.5, b: 1 }, initial: { x: 0 } })",
+};
+
+const searchRange: Value<SearchRange> = either(pair, named(pair, "{ N: [0, 100] }"));
+
+const range = optional(
+  searchRange,
+  "Lowest and highest value to look at, for a system by state",
+  "the rule's bounds, else a million times the largest parameter either way",
+);
+
+const equilibriaOptions: Schema<EquilibriaOptions> = {
+  ...held,
+  range,
+  searches: optional(whole(1, 400, 1_000_000), "For systems: how many places the search starts from", 400),
+};
+
+const equilibriaSchema: FunctionSchema = {
+  name: "equilibria",
+  takes,
+  options: { fields: equilibriaOptions },
+  example: "equilibria(rule, { parameters: { r: 0.5, K: 1000 } })",
+};
+
+const cyclesOptions: Schema<CyclesOptions> = {
+  ...held,
+  period: required(whole(1, 2, 1000), "Periods until the values come round"),
+  range,
+};
+
+const cyclesSchema: FunctionSchema = {
+  name: "cycles",
+  takes,
+  options: { fields: cyclesOptions },
+  example: "cycles(rule, { period: 2, parameters: { r: 3.2 } })",
+};
+
+const vary = required(text("r", "the name of a parameter"), "Parameter that is varied");
+
+const bifurcationsOptions: Schema<BifurcationsOptions> = {
+  ...held,
+  vary,
+  range: required(pair, "Values that are followed, from the first to the second, up or down"),
+  initial: required(
+    either(anyNumber, valuesByName),
+    "First value from which the cycle to be followed is reached; for a system a value by state, near the equilibrium to be followed",
+  ),
+  limit: optional(whole(1, 8, 10_000), "At most so many bifurcations", 8),
+};
+
+const bifurcationsSchema: FunctionSchema = {
+  name: "bifurcations",
+  takes,
+  options: { fields: bifurcationsOptions },
+  example: 'bifurcations(rule, { vary: "r", range: [2.8, 3.3], initial: 0.3 })',
+};
+
+const longest = 1e9;
+
+const lyapunovExponentOptions: Schema<LyapunovExponentOptions> = {
+  ...held,
+  initial,
+  periods: optional(whole(300, 100_000, longest), "Periods measured, at least 300", 100_000),
+  discard: optional(whole(0, 1000, longest), "Periods left out at the beginning", 1000),
+  level: intervalLevel,
+  onProgress,
+  signal,
+};
+
+const lyapunovExponentSchema: FunctionSchema = {
+  name: "lyapunovExponent",
+  takes,
+  options: { fields: lyapunovExponentOptions },
+  example: "lyapunovExponent(rule, { parameters: { r: 3.9 }, initial: { x: 0.3 } })",
+};
+
+const predictionHorizonOptions: Schema<PredictionHorizonOptions> = {
+  ...lyapunovExponentOptions,
+  error: required(positive, "Uncertainty of the first value, in its unit"),
+  tolerance: required(positive, "Largest error of a value that is still of use, in the same unit"),
+};
+
+const predictionHorizonSchema: FunctionSchema = {
+  name: "predictionHorizon",
+  takes,
+  options: { fields: predictionHorizonOptions },
+  example: "predictionHorizon(rule, { error: 0.001, tolerance: 0.1, initial: { x: 0.3 } })",
+};
+
+type Ends = Exclude<AttractorOptions["values"], readonly number[]>;
+
+const ends: Schema<Ends> = {
+  from: required(anyNumber, "First value"),
+  to: required(anyNumber, "Last value"),
+  count: optional(whole(1, 600, 1_000_000), "How many values, ends included", 600),
+};
+
+const estimate: Schema<NonNullable<AttractorOptions["estimate"]>> = {
+  value: required(anyNumber, "Estimate of the parameter"),
+  interval: required(pair, "Its interval"),
+};
+
+const attractorOptions: Schema<AttractorOptions> = {
+  parameters: held.parameters,
+  vary,
+  values: required(
+    either(listOf(anyNumber, "[2, 3, 4]"), shapeOf(ends, "{ from: 2.5, to: 4 }")),
+    "Values of the parameter: a list, or two ends with how many",
+  ),
+  periods: optional(whole(1, 300, 1_000_000), "Periods kept at each value", 300),
+  discard: optional(whole(0, 500, longest), "Periods left out before", 500),
+  initial: required(
+    either(anyNumber, listOf(anyNumber, "[0.1, 0.9]")),
+    "First values of the one state to start from: several show attractors that exist side by side",
+  ),
+  estimate: optional(
+    shapeOf(estimate, "{ value: 3.1, interval: [2.9, 3.3] }"),
+    "What a fit says of the parameter, to be marked",
+    "the estimate of the fit given",
+  ),
+  onProgress,
+  signal,
+};
+
+/** Values kept by an attractor: every period kept at every value from every start. */
+const attractorSize: FunctionSchema["sizes"] = [
+  {
+    option: "periods",
+    bytes: ({ values, periods = 300, initial: starts, discard = 500 }) => {
+      const at = Array.isArray(values) ? values.length : (((values as Ends).count ?? 600) as number);
+      const from = Array.isArray(starts) ? starts.length : 1;
+      return 8 * ((periods as number) * at * from + (discard as number));
+    },
+  },
+];
+
+const attractorSchema: FunctionSchema = {
+  name: "attractor",
+  takes,
+  options: { fields: attractorOptions },
+  example: 'attractor(rule, { vary: "r", values: { from: 2.5, to: 4 }, initial: 0.3 })',
+  sizes: attractorSize,
+};
+
+const cobwebOptions: Schema<CobwebOptions> = {
+  ...held,
+  initial: required(valuesByName, "First value by state"),
+  periods: optional(whole(1, 30, 1_000_000), "Periods shown", 30),
+};
+
+const cobwebSchema: FunctionSchema = {
+  name: "cobweb",
+  takes,
+  options: { fields: cobwebOptions },
+  example: "cobweb(rule, { initial: { x: 0.3 }, parameters: { r: 3.2 } })",
+};
+
+const known: Schema<NonNullable<BasinsOptions["known"]>> = {
+  mean: required(anyNumber, "Mean of the first value"),
+  sd: required(positive, "Standard deviation of the first value"),
+};
+
+const basinsOptions: Schema<BasinsOptions> = {
+  ...held,
+  range: required(pair, "Lowest and highest first value to look at"),
+  count: optional(whole(1, 400, 1_000_000), "First values tried before borders are narrowed down", 400),
+  periods: optional(whole(1, 3000, longest), "Periods until a path is taken to have arrived", 3000),
+  known: optional(
+    shapeOf(known, "{ mean: 20, sd: 4 }"),
+    "What is known of the first value: normal with this mean and standard deviation",
+  ),
+  onProgress,
+  signal,
+};
+
+const basinsSchema: FunctionSchema = {
+  name: "basins",
+  takes,
+  options: { fields: basinsOptions },
+  example: "basins(rule, { range: [0, 110], parameters: { r: 0.2, K: 100, A: 20 } })",
+};
+
+const matrixGrowthSchema: FunctionSchema = {
+  name: "matrixGrowth",
+  takes,
+  options: { fields: held },
+  example: "matrixGrowth(rule, { parameters: { f1: 0, f2: 4, f3: 3, s1: 0.5, s2: 0.25 } })",
+};
+
+export const dynamicsSchemas: readonly FunctionSchema[] = [
+  trajectorySchema,
+  exactTrajectorySchema,
+  closedFormSchema,
+  equilibriaSchema,
+  cyclesSchema,
+  bifurcationsSchema,
+  lyapunovExponentSchema,
+  predictionHorizonSchema,
+  attractorSchema,
+  cobwebSchema,
+  basinsSchema,
+  matrixGrowthSchema,
+];
