@@ -1,3 +1,4 @@
+import { frozenCopy } from "../../src/numeric/index.js";
 import { checkCall } from "../options/index.js";
 import { type Bundle, showing, type Table } from "../tables/index.js";
 import { figureBundle } from "./figure-bundle.js";
@@ -60,16 +61,10 @@ export interface FigureOptions {
  */
 export function figure(options: FigureOptions): Figure {
   checkCall("figure", arguments);
-  const { title, x, y, layers } = options;
-  const panels = options.panels ?? (x && y && layers ? [{ title: "", x, y, layers }] : []);
+  // Copies: the caller's lists must not be frozen, nor change the figure later.
+  const { title, x, y, layers, panels: given, summary = "", notes = [], numbers } = frozenCopy(options);
+  const panels = given ?? (x && y && layers ? [{ title: "", x, y, layers }] : []);
   if (panels.length === 0 || panels.some((panel) => panel.layers.length === 0)) throw emptyFigure(title);
-  const made: Figure = {
-    kind: "figure",
-    title,
-    panels: Object.freeze([...panels]),
-    summary: options.summary ?? "",
-    notes: Object.freeze([...(options.notes ?? [])]),
-    numbers: options.numbers,
-  };
+  const made: Figure = { kind: "figure", title, panels, summary, notes, numbers };
   return showing(made, (): Promise<Bundle> => figureBundle(made));
 }

@@ -1,17 +1,20 @@
 import {
-  type ChangePoint,
   type ChangePointOptions,
   type DensityDependence,
   type DensityOptions,
+  type ChangePoint as EngineChangePoint,
   changePoint as findChangePoint,
   densityDependence as testDensity,
 } from "../../src/evidence/index.js";
+import { frozenCopy } from "../../src/numeric/index.js";
 import type { Observations } from "../../src/record/index.js";
-import type { Rule } from "../../src/rule/index.js";
+import { type Rule, ruleLabel } from "../../src/rule/index.js";
 import { type Figure, figure, type Panel } from "../figures/index.js";
 import { checkCall } from "../options/index.js";
+import type { ChangePoint } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { presentFitIn } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
 
 /**
@@ -28,9 +31,9 @@ export function changePoint(
   options: ChangePointOptions = {},
 ): ChangePoint {
   checkCall("changePoint", arguments);
-  const looked = findChangePoint(rule, observations, { seed: caseLog.seed(), ...options });
-  caseLog.noteStep(`looked for a break in "${rule.text}": ${looked.sentence}`);
-  return showing({ ...looked }, () => shownTogether([breaksTable(looked), breaksFigure(looked)]));
+  const looked = findChangePoint(rule, observations, { seed: caseLog.seed(), ...frozenCopy(options) });
+  caseLog.noteStep(`looked for a break in "${ruleLabel(rule)}": ${looked.sentence}`);
+  return showing(presentFitIn(looked), () => shownTogether([breaksTable(looked), breaksFigure(looked)]));
 }
 
 /**
@@ -45,17 +48,17 @@ export function densityDependence(
   options: DensityOptions = {},
 ): DensityDependence {
   checkCall("densityDependence", arguments);
-  const tested = testDensity(observations, { seed: caseLog.seed(), ...options });
+  const tested = testDensity(observations, { seed: caseLog.seed(), ...frozenCopy(options) });
   caseLog.noteStep(`tested density dependence: ${tested.sentence}`);
-  return showing({ ...tested }, () => shownTogether([densityTable(tested)]));
+  return showing(tested, () => shownTogether([densityTable(tested)]));
 }
 
-function breaksTable(looked: ChangePoint): Table {
+function breaksTable(looked: EngineChangePoint): Table {
   const { period } = looked.fit.observations;
   const date = { kind: "number", digits: 6, unit: period.unit, grouped: false } as const;
   const percent = Math.round(100 * looked.level);
   return table({
-    title: `One change in the parameters of ${looked.fit.rule.text}`,
+    title: `One change in the parameters of ${ruleLabel(looked.fit.rule)}`,
     columns: [
       ...(looked.groups.length > 1 ? [{ key: "group", label: "Group", kind: "text" } as const] : []),
       { key: "date", label: "Likeliest date", ...date },
@@ -82,7 +85,7 @@ function breaksTable(looked: ChangePoint): Table {
   });
 }
 
-function breaksFigure(looked: ChangePoint): Figure {
+function breaksFigure(looked: EngineChangePoint): Figure {
   const { observations, rule } = looked.fit;
   const x = { title: observations.period.column, unit: observations.period.unit };
   const panels = looked.groups.flatMap((group): Panel[] => {
@@ -119,7 +122,7 @@ function breaksFigure(looked: ChangePoint): Figure {
     ];
   });
   return figure({
-    title: `When the parameters of ${rule.text} may have changed`,
+    title: `When the parameters of ${ruleLabel(rule)} may have changed`,
     panels,
     summary: looked.sentence,
   });

@@ -10,6 +10,7 @@ import {
   tradeoff as tradeoffOf,
 } from "../../src/decision/index.js";
 import type { Fit } from "../../src/estimate/index.js";
+import { frozenCopy } from "../../src/numeric/index.js";
 import type { Rule } from "../../src/rule/index.js";
 import { checkCall } from "../options/index.js";
 import { showing } from "../tables/index.js";
@@ -28,9 +29,9 @@ import { shownTogether } from "./shown-together.js";
  */
 export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum {
   checkCall("optimize", arguments);
-  const found = bestSetting(subject, { seed: caseLog.seed(), ...options });
+  const found = bestSetting(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
   caseLog.noteStep(`asked which ${found.vary} is best for ${found.measure}`);
-  return showing({ ...found }, () => shownTogether(showBest(found)));
+  return showing(found, () => shownTogether(showBest(found)));
 }
 
 /**
@@ -41,9 +42,9 @@ export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum
  */
 export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): Sensitivity {
   checkCall("sensitivity", arguments);
-  const found = sensitivityOf(subject, { seed: caseLog.seed(), ...options });
+  const found = sensitivityOf(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
   caseLog.noteStep(`asked what ${found.measure} hangs on`);
-  return showing({ ...found }, () => shownTogether(showSensitivity(found)));
+  return showing(found, () => shownTogether(showSensitivity(found)));
 }
 
 /**
@@ -56,7 +57,7 @@ export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): S
  */
 export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeoff {
   checkCall("tradeoff", arguments);
-  const found = tradeoffOf(subject, { seed: caseLog.seed(), ...options });
+  const found = tradeoffOf(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
   caseLog.noteStep(`set ${found.rows.length} choices of ${found.vary} side by side`);
-  return showing({ ...found }, () => shownTogether(showTradeoff(found)));
+  return showing(found, () => shownTogether(showTradeoff(found)));
 }

@@ -6,13 +6,14 @@ import {
   type Solved,
   type SolveOptions,
   solveFor as solveForSetting,
-  type TimeToReach,
   type TimeToReachOptions,
 } from "../../src/decision/index.js";
 import type { Fit } from "../../src/estimate/index.js";
+import { frozenCopy } from "../../src/numeric/index.js";
 import type { Forecast, Simulation } from "../../src/projection/index.js";
 import type { Rule } from "../../src/rule/index.js";
 import { checkCall } from "../options/index.js";
+import { type TimeToReach, withSingleReach } from "../results/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { levelWords, showNextReading, showReach, showSolved } from "./show-decisions.js";
@@ -26,9 +27,9 @@ import { shownTogether } from "./shown-together.js";
  */
 export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOptions): TimeToReach {
   checkCall("timeToReach", arguments);
-  const found = reachesValue(ahead, options);
+  const found = withSingleReach(reachesValue(ahead, frozenCopy(options)));
   caseLog.noteStep(`asked when ${found.state} ${levelWords(found)}`);
-  return showing({ ...found }, () => shownTogether(showReach(found, ahead)));
+  return showing(found, () => shownTogether(showReach(found, ahead)));
 }
 
 /**
@@ -42,9 +43,9 @@ export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOp
  */
 export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
   checkCall("solveFor", arguments);
-  const found = solveForSetting(subject, { seed: caseLog.seed(), ...options });
+  const found = solveForSetting(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
   caseLog.noteStep(`asked what ${found.vary} brings ${found.measure} to its target`);
-  return showing({ ...found }, () => shownTogether(showSolved(found)));
+  return showing(found, () => shownTogether(showSolved(found)));
 }
 
 /**
@@ -55,7 +56,7 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
  */
 export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOptions): NextReading {
   checkCall("nextReading", arguments);
-  const found = nextReadingOf(fits, { seed: caseLog.seed(), ...options });
+  const found = nextReadingOf(fits, { seed: caseLog.seed(), ...frozenCopy(options) });
   caseLog.noteStep(`asked which further reading of ${found.state} would ${found.purpose}`);
-  return showing({ ...found }, () => shownTogether(showNextReading(found)));
+  return showing(found, () => shownTogether(showNextReading(found)));
 }

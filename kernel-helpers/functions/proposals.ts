@@ -1,9 +1,16 @@
-import { type Proposal, type ProposeOptions, propose as tryCatalogue } from "../../src/evidence/index.js";
+import {
+  type Proposal as EngineProposal,
+  type ProposeOptions,
+  propose as tryCatalogue,
+} from "../../src/evidence/index.js";
+import { frozenCopy } from "../../src/numeric/index.js";
 import type { Observations } from "../../src/record/index.js";
 import { type Figure, figure } from "../figures/index.js";
 import { checkCall } from "../options/index.js";
+import type { Proposal } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { presentFit } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
 
 /**
@@ -16,9 +23,9 @@ import { shownTogether } from "./shown-together.js";
  */
 export function propose(observations: Observations, options: ProposeOptions = {}): Proposal {
   checkCall("propose", arguments);
-  const proposal = tryCatalogue(observations, { seed: caseLog.seed(), ...options });
+  const proposal = tryCatalogue(observations, { seed: caseLog.seed(), ...frozenCopy(options) });
   caseLog.noteStep(`tried the catalogue: ${proposal.sentence}`);
-  return showing({ ...proposal }, () =>
+  return showing(Object.assign(proposal, { fits: proposal.fits.map(presentFit) }), () =>
     shownTogether([
       proposalTable(proposal),
       proposal.fits.length > 0 ? supportedFigure(proposal) : undefined,
@@ -27,14 +34,14 @@ export function propose(observations: Observations, options: ProposeOptions = {}
   );
 }
 
-function proposalTable(proposal: Proposal): Table {
+function proposalTable(proposal: EngineProposal): Table {
   const unit = proposal.fits[0]?.observations.states[0]?.unit ?? "";
   return table({
     title: "Rules of the catalogue tried on this record",
     columns: [
       { key: "name", label: "Rule", kind: "text" },
       { key: "errors", label: "Error in the", kind: "text" },
-      { key: "unknowns", label: "Unknowns", kind: "integer" },
+      { key: "parameters", label: "Unknowns", kind: "integer" },
       { key: "difference", label: "AICc above the lowest", kind: "number", digits: 3 },
       { key: "heldOut", label: "Score on the last fifth, held out", kind: "number", digits: 3, unit },
       { key: "answer", label: "Answer", kind: "text" },
@@ -52,7 +59,7 @@ function supportedText(undetermined: readonly string[]): string {
   return undetermined.length === 0 ? "supported" : `supported; does not determine ${undetermined.join(", ")}`;
 }
 
-function leftOutTable(proposal: Proposal): Table {
+function leftOutTable(proposal: EngineProposal): Table {
   return table({
     title: "Rules that were not tried",
     columns: [
@@ -63,7 +70,7 @@ function leftOutTable(proposal: Proposal): Table {
   });
 }
 
-function supportedFigure(proposal: Proposal): Figure {
+function supportedFigure(proposal: EngineProposal): Figure {
   const { period, states, groups } = proposal.fits[0]!.observations;
   const [state] = states;
   const names = proposal.rows.filter((row) => row.supported);

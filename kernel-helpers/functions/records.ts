@@ -1,12 +1,13 @@
 import type { DataFrame } from "danfojs-node";
+import { freezeDeep, frozenCopy } from "../../src/numeric/index.js";
 import {
   type ColumnTable,
   type Decision,
   type DifferenceOptions,
   type Differences,
   differences as differencesOf,
+  type Observations as EngineObservations,
   type ObservationOptions,
-  type Observations,
   observations as observe,
   tableOfRows,
 } from "../../src/record/index.js";
@@ -14,6 +15,7 @@ import {
   holdsSeveral,
   type NamedTable,
   type ReadOptions,
+  type RecordSource,
   readTable,
   type WriteOptions,
   writeTables,
@@ -30,11 +32,12 @@ import {
   toFrame,
 } from "../dataframe/index.js";
 import { checkCall } from "../options/index.js";
+import type { Observations } from "../results/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { decisionRows, decisionSentence } from "./decisions-table.js";
 import { differencesBundle } from "./show-differences.js";
-import { observationsBundle } from "./show-observations.js";
+import { presentObservations } from "./show-observations.js";
 
 /**
  * Reads a record: a text file with delimiters, a workbook, Parquet, JSON, or a table of a database file.
@@ -52,9 +55,10 @@ export async function readRecord(path: string, options: ReadOptions = {}): Promi
   checkCall("readRecord", arguments);
   const table = await readTable(path, options);
   const frame = toFrame(table);
-  const found = Object.freeze([...table.source.found, ...marksFound(table.names)]);
-  noteFrame(frame, { ...notesOf(frame), source: Object.freeze({ ...table.source, found }) });
-  caseLog.noteRecord({ path, rows: table.source.rows, checksum: table.source.checksum });
+  const found = [...table.source.found, ...marksFound(table.names)];
+  const source = freezeDeep({ ...table.source, found });
+  noteFrame(frame, { ...notesOf(frame), source });
+  noteSource(source);
   return frame;
 }
 
@@ -108,9 +112,11 @@ function withDecisions(
 export function observations(record: RecordLike, options: ObservationOptions): Observations {
   checkCall("observations", arguments);
   const table = columnsOf(record);
-  const made = { ...observe(table, options) };
+  const made = presentObservations(observe(table, frozenCopy(options)));
+  const { source } = notesOf(record);
+  if (source !== undefined) noteSource(source);
   noteObservations(made, table.decisions ?? []);
-  return showing(made, () => observationsBundle(made));
+  return made;
 }
 
 /**
@@ -118,15 +124,20 @@ export function observations(record: RecordLike, options: ObservationOptions): O
  *
  * @example differences(counts, { per: "log" });
  */
-export function differences(record: Observations, options: DifferenceOptions = {}): Differences {
+export function differences(record: EngineObservations, options: DifferenceOptions = {}): Differences {
   checkCall("differences", arguments);
-  const made = { ...differencesOf(record, options) };
+  const made = differencesOf(record, frozenCopy(options));
   return showing(made, () => differencesBundle(made));
+}
+
+/** For the rerun block: the file behind a record, which may have been read before the case was opened. */
+function noteSource({ path, rows, checksum }: RecordSource): void {
+  caseLog.noteRecord({ path, rows, checksum });
 }
 
 /** For the rerun block: how the record was read, and each choice of the options that changed a value. */
 function noteObservations(
-  { states, period, decisions = [] }: Observations,
+  { states, period, decisions = [] }: EngineObservations,
   known: readonly Decision[],
 ): void {
   const names = states.map(({ column }) => `"${column}"`).join(", ");

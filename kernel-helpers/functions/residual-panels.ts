@@ -1,5 +1,6 @@
 import type { Fit, GroupFit } from "../../src/estimate/index.js";
 import { normalQuantile } from "../../src/numeric/index.js";
+import { ruleLabel } from "../../src/rule/index.js";
 import { type Figure, figure, type Panel } from "../figures/index.js";
 
 type Point = GroupFit["points"][number];
@@ -16,7 +17,7 @@ export function residualPanels(fit: Fit): readonly Figure[] {
       points: group.points.filter((point) => point.state === state),
     }));
     return figure({
-      title: `Residuals of ${fit.rule.text}${several ? `, ${state}` : ""}`,
+      title: `Residuals of ${ruleLabel(fit.rule)}${several ? `, ${state}` : ""}`,
       panels: panelsOf(fit, state, groups),
       summary:
         "Without pattern in the first three panels and on the line in the fourth where the rule and its errors are right.",

@@ -7,9 +7,10 @@ import {
 } from "../../src/decision/index.js";
 import { type Forecast, levelSide, type Simulation } from "../../src/projection/index.js";
 import { type Figure, figure } from "../figures/index.js";
+import { groupName } from "../results/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
 import { ruleTitle } from "./rule-title.js";
-import { decidingFan, projectedName } from "./show-forecast.js";
+import { decidingFan } from "./show-forecast.js";
 
 const percent = (level: number): string => `${Number((100 * level).toPrecision(12))}%`;
 
@@ -42,7 +43,7 @@ function reachTable(found: TimeToReach): Table {
     ],
     rows: found.groups.map((group) => ({
       ...group,
-      who: projectedName(group),
+      who: groupName(group),
       ...timesOf(group, dated),
     })),
     notes: [
@@ -62,7 +63,7 @@ function reachTable(found: TimeToReach): Table {
 /** "A: there by hour 372 in 99.0% of draws (Monte-Carlo error 0.2%)". */
 function eventWords(found: TimeToReach): string {
   const each = found.groups.map((group) => {
-    const name = projectedName(group);
+    const name = groupName(group);
     const share = `${(100 * (1 - group.never)).toFixed(1)}% of draws (Monte-Carlo error ${(100 * group.neverError).toFixed(1)}%)`;
     return `${name === "" ? "" : `${name}: `}there by ${group.words.lastPeriod} in ${share}`;
   });
@@ -103,7 +104,7 @@ function reachFigure(found: TimeToReach): Figure {
     y: { title: "Share of draws there by then", ends: [0, 1] },
     layers: found.groups.map((group) => ({
       mark: "line",
-      name: projectedName(group) || "draws",
+      name: groupName(group) || "draws",
       x: group.distribution.map((row) => row.time),
       y: group.distribution.map((row) => row.by),
       stepped: true,

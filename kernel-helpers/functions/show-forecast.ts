@@ -1,5 +1,7 @@
 import type { Forecast, GroupForecast } from "../../src/projection/index.js";
+import { ruleLabel } from "../../src/rule/index.js";
 import { type FanFigureOptions, type Figure, fanFigure, type ProjectedSeries } from "../figures/index.js";
+import { groupName } from "../results/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
 
@@ -9,20 +11,9 @@ export function showForecast(ahead: Forecast): readonly (Figure | Table)[] {
   return [...fanCharts(ahead), aheadTable(ahead), ...(contrast === undefined ? [] : [contrast])];
 }
 
-/** How a group and scenario are named together. */
-export function projectedName({
-  group,
-  scenario,
-}: {
-  readonly group: string;
-  readonly scenario: string;
-}): string {
-  return [group, scenario].filter((part) => part !== "").join(", ");
-}
-
 function fanCharts(ahead: Forecast): Figure[] {
   return ahead.fit.rule.states.map((state) =>
-    fanFigure({ ...fanOf(ahead, state), title: `Forecast of ${ahead.fit.rule.text}` }),
+    fanFigure({ ...fanOf(ahead, state), title: `Forecast of ${ruleLabel(ahead.fit.rule)}` }),
   );
 }
 
@@ -58,7 +49,7 @@ function projected(ahead: Forecast, group: GroupForecast, name: string): Project
   const end = group.index.indexOf(group.recordEnd);
   const horizon = group.predictability?.predictionHorizon;
   return {
-    name: projectedName(group),
+    name: groupName(group),
     recorded: { name: "recorded", x: recorded.time, y: recorded.values[name]! },
     central: { name: "fitted path", x, y: state.central },
     bands: state.bands
@@ -84,7 +75,7 @@ function aheadTable(ahead: Forecast): Table {
   return table({
     title: "Periods ahead",
     columns: [
-      ...several("group", "Group", ahead.groups.map(projectedName)),
+      ...several("group", "Group", ahead.groups.map(groupName)),
       ...several("state", "State", ahead.fit.rule.states),
       dated
         ? { key: "time", label: ahead.fit.observations.period.column, kind: "text" }
@@ -137,7 +128,7 @@ function rowsAhead(group: GroupForecast, level: number, each: number): Readonly<
       !shown.has(t)
         ? []
         : {
-            group: projectedName(group),
+            group: groupName(group),
             state: state.state,
             time: group.labels?.[t] ?? group.time[t],
             central: state.central[t],
@@ -158,7 +149,7 @@ function contrastTable(ahead: Forecast): Table | undefined {
     return group.states.map((state, s) => {
       const end = group.index.length - 1;
       const difference = state.central[end]! - first.states[s]!.central[end]!;
-      return { what: projectedName(group), than: first.scenario, state: state.state, difference };
+      return { what: groupName(group), than: first.scenario, state: state.state, difference };
     });
   });
   if (rows.length === 0) return undefined;
@@ -180,6 +171,6 @@ function notesOf(ahead: Forecast): string[] {
   return [
     "Mean path: uncertainty of the parameters. Future observation: that and the error of a single value.",
     `${paths} drawn paths, seed ${seed}; quantiles by definition 7.`,
-    ...cautionsByGroup(ahead.groups.map((group) => ({ ...group, group: projectedName(group) }))),
+    ...cautionsByGroup(ahead.groups.map((group) => ({ ...group, group: groupName(group) }))),
   ];
 }

@@ -1,6 +1,7 @@
 import type { Observations, ObservedGroup, ObservedState } from "../../src/record/index.js";
 import { type Figure, type FlaggedValue, recordFigure } from "../figures/index.js";
-import { type Bundle, type Table, table } from "../tables/index.js";
+import { type Observations as ShownObservations, withLast } from "../results/index.js";
+import { type Bundle, showing, type Table, table } from "../tables/index.js";
 import { decisionsTable } from "./decisions-table.js";
 import { countsSentence, findingsList, periodSentence } from "./findings-list.js";
 import { shownTogether } from "./shown-together.js";
@@ -8,8 +9,13 @@ import { shownTogether } from "./shown-together.js";
 /** Series drawn; with more the figure says how many are left out. */
 const drawn = 12;
 
+/** Makes a record ready for a reader: its last values, its display, and nothing left to change in it. */
+export function presentObservations(observations: Observations): ShownObservations {
+  return showing(withLast(observations), () => observationsBundle(observations));
+}
+
 /** Shows a record: one line a series, the raw values with flagged rows marked, and what was found. */
-export function observationsBundle(observations: Observations): Promise<Bundle> {
+function observationsBundle(observations: Observations): Promise<Bundle> {
   const findings = findingsList(observations.findings);
   const { decisions = [] } = observations;
   const decided = decisions.length > 0 ? decisionsTable(decisions) : undefined;

@@ -1,4 +1,5 @@
 import type { GroupForecast, Simulation } from "../../src/projection/index.js";
+import { ruleLabel } from "../../src/rule/index.js";
 import { type Figure, figure, type Layer } from "../figures/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
@@ -14,7 +15,7 @@ const percent = (level: number): string => `${Number((100 * level).toPrecision(1
 function figuresOf(run: Simulation): Figure[] {
   return run.rule.states.map((name, s) =>
     figure({
-      title: `Simulation${ruleTitle(run.rule.text, "of")}: ${name}`,
+      title: `Simulation${ruleTitle(ruleLabel(run.rule), "of")}: ${name}`,
       panels: run.groups.map((group) => ({
         title: group.scenario,
         x: { title: run.options.period },

@@ -27,7 +27,6 @@ import {
   func,
   listOf,
   named,
-  number,
   optional,
   required,
   type Schema,
@@ -35,22 +34,21 @@ import {
   text,
   whole,
 } from "./option.js";
-import { noise, plans } from "./projection-schemas.js";
+import { plans, startOptions } from "./plan-schemas.js";
+import { noise } from "./projection-schemas.js";
 
 type Shared = Omit<SensitivityOptions, "answer" | "vary">;
 
 const shared: Schema<Shared> = {
+  ...startOptions,
   periods: required(whole(1, 24), "Whole periods ahead"),
   inputs: optional(
     plans,
     "By input: its plan; for a fit the first period ahead comes first, for a rule period 0",
   ),
-  group: optional(text("A", "the name of a group"), "Of a fit with several groups: which one"),
   parameters: optional(valuesByName, "Of a rule: its parameters by name"),
   initial: optional(firstValues, "Of a rule: its first values by state"),
   noise: optional(noise, "Of a rule: random change by state, for probabilities"),
-  period: optional(text("month"), "Of a rule: what a period is called", '"period"'),
-  startsAt: optional(number({ whole: true }, 0), "Of a rule: what the present period is numbered", 0),
   paths: optional(whole(1, 2000), "Random paths for probabilities and margins", 2000),
   seed,
   onProgress,
@@ -199,7 +197,7 @@ const nextReadingOptions: Schema<NextReadingOptions> = {
     "Cost of a reading at a time, in any unit; the gain is then weighed by it",
     "the same everywhere",
   ),
-  group: shared.group,
+  group: startOptions.group,
   paths: optional(whole(1, 1000), "Parameter values drawn", 1000),
   seed,
   onProgress,

@@ -31,8 +31,6 @@ import {
   either,
   listOf,
   named,
-  number,
-  numbers,
   optional,
   required,
   type Schema,
@@ -41,6 +39,7 @@ import {
   type Value,
   whole,
 } from "./option.js";
+import { plans, startOptions } from "./plan-schemas.js";
 
 const takes = [ruleOrFit];
 
@@ -58,14 +57,11 @@ const initial = optional(
 );
 
 const trajectoryOptions: Schema<TrajectoryOptions> = {
+  ...startOptions,
   parameters: held.parameters,
   initial,
   periods: required(whole(0, 12), "Whole periods to run"),
-  inputs: optional(
-    named(either(anyNumber, numbers("[300, 300, 450]")), "{ payment: 300 }"),
-    "By input: one number, or its values by period, period 0 first",
-  ),
-  startsAt: optional(number({ whole: true }, 0), "Number of the period of the first value", 0),
+  inputs: optional(plans, "By input: what it will be, from the first period on"),
 };
 
 const trajectorySchema: FunctionSchema = {

@@ -1,6 +1,5 @@
 import type {
   ForecastOptions,
-  InputPlan,
   Noise,
   Scenarios,
   SimulateOptions,
@@ -26,7 +25,6 @@ import {
   listOf,
   named,
   number,
-  numbers,
   oneOf,
   optional,
   required,
@@ -36,22 +34,7 @@ import {
   type Value,
   whole,
 } from "./option.js";
-
-const byPeriod = (example: string): Value<Readonly<Record<number, number>>> =>
-  named(anyNumber, example) as Value<Readonly<Record<number, number>>>;
-
-const planFields: Schema<Extract<InputPlan, { readonly usual: number }>> = {
-  usual: required(anyNumber, "Level in every period that nothing else is said of"),
-  from: optional(byPeriod("{ 13: 450 }"), "Levels that hold from a period on, by its number"),
-  at: optional(byPeriod("{ 20: 0 }"), "Levels of single periods, by their number"),
-};
-
-const plan: Value<InputPlan> = either(
-  either(anyNumber, numbers("[300, 300, 450]")),
-  shapeOf(planFields, "{ usual: 300, from: { 13: 450 } }"),
-);
-
-export const plans: Value<Readonly<Record<string, InputPlan>>> = named(plan, "{ payment: 300 }");
+import { plans, startOptions } from "./plan-schemas.js";
 
 const scenarios: Value<Scenarios> = named(plans, "{ usual: { payment: 300 }, more: { payment: 450 } }");
 
@@ -126,9 +109,14 @@ const scenarioOption = optional(
 
 const forecastOptions: Schema<ForecastOptions> = {
   periods: required(whole(1, 12), "Whole periods beyond the last recorded one"),
+  from: optional(
+    either(text("2026-06", "the label of a period"), number({}, 28)),
+    "The recorded period to start after, by its label or number",
+    "the last one",
+  ),
   inputs: optional(
     plans,
-    "By input: its plan; needed for every input of the rule, the first period ahead first",
+    "By input: what it will be, the first period ahead first; needed for every input that the record does not hold so far ahead",
   ),
   scenarios: scenarioOption,
   levels,
@@ -148,24 +136,19 @@ const forecastSchema: FunctionSchema = {
 };
 
 const simulateOptions: Schema<SimulateOptions> = {
+  ...startOptions,
   parameters: optional(valuesByName, "Parameters by name; those that the rule holds fixed may be left out"),
   initial: optional(
     firstValues,
     "First values by state, with lags a list, oldest first; those that the rule states may be left out",
   ),
   periods: required(whole(1, 12), "Whole periods to run"),
-  inputs: optional(plans, "By input: its plan, period 0 first"),
+  inputs: optional(plans, "By input: what it will be, from the first period on"),
   scenarios: scenarioOption,
   noise: optional(noise, "By state: the random change of each period", "what the rule says"),
   observationNoise: optional(
     named(error, noiseExample),
     "By state: the observation error, which is reported and not carried on",
-  ),
-  period: optional(text("month"), 'What a period is called, as in "month"', '"period"'),
-  startsAt: optional(
-    number({ whole: true }, 0),
-    "What the first period is numbered, as the last recorded month is",
-    0,
   ),
   paths: optional(whole(1, 4000), "Random paths", "4000, or 1 where nothing is random"),
   levels,

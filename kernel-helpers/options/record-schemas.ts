@@ -32,7 +32,7 @@ export const column: Value<string> = text("owed", "the name of a column");
 
 const columns: Value<string | readonly string[]> = either(column, listOf(column, '["loan"]'));
 
-const stepLength: Schema<StepLength> = {
+export const stepLength: Schema<StepLength> = {
   every: required(positive, "How many units one step takes"),
   of: required(text("hour", "a unit of time"), "Unit of time, such as hour, day or month"),
   begins: optional(

@@ -13,7 +13,14 @@ export type { Criteria } from "./result/criteria.js";
 export type { Estimate } from "./result/estimate-of.js";
 export type { FitPoint } from "./result/fit-points.js";
 export type { GroupFit } from "./result/group-fit.js";
-export { type EstimateRow, estimates, points, type SummaryRow, summary } from "./result/views.js";
+export {
+  type EstimateRow,
+  estimates,
+  type PointRow,
+  points,
+  type SummaryRow,
+  summary,
+} from "./result/views.js";
 export type { FitRows } from "./rows/fit-rows.js";
 export { type SecondOpinion, secondOpinion } from "./second-opinion.js";
 export { normalEquations } from "./systems/normal-equations.js";

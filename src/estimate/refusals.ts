@@ -1,5 +1,5 @@
 import { ModelError } from "../numeric/index.js";
-import type { ObservedGroup } from "../record/index.js";
+import { type ObservedGroup, periodWords } from "../record/index.js";
 
 const named = (group: ObservedGroup): string => (group.name === "" ? "" : ` of "${group.name}"`);
 
@@ -116,10 +116,11 @@ export function refuseAllCensored(group: ObservedGroup, state: string, side: "ab
   );
 }
 
-export function refuseInputGap(input: string, group: ObservedGroup, period: number): ModelError {
+export function refuseInputGap(input: string, group: ObservedGroup, index: number): ModelError {
+  const period = periodWords(group.axis, index);
   return new ModelError(
     "input-missing-in-period",
-    `The input "${input}" is not recorded in period ${period}${named(group)}, which a step of the rule reads. Record it (0 where ` +
+    `The input "${input}" is not recorded at ${period}${named(group)}, which a step of the rule reads. Record it (0 where ` +
       "nothing happened), or fit the part of the record that has it.",
     { input, group: group.name, period },
   );
@@ -201,15 +202,6 @@ export function refuseNoNewRows(): ModelError {
   return new ModelError(
     "no-new-rows",
     "No rows were given to extend the fit with. Give the rows that came in after those of the fit.",
-  );
-}
-
-export function refuseOverlap(group: string, time: number): ModelError {
-  return new ModelError(
-    "rows-overlap",
-    `The new rows${group && ` of "${group}"`} begin at ${time}, inside the record that the fit already has. Give only later rows; to change ` +
-      "earlier ones, fit the corrected record anew.",
-    { group, time },
   );
 }
 

@@ -1,16 +1,15 @@
+import { type InputPlans, plannedInputs } from "../dynamics/index.js";
 import type { Fit, GroupFit } from "../estimate/index.js";
-import type { ObservedGroup } from "../record/index.js";
-import { compileRule, type Rule } from "../rule/index.js";
+import { inputByPeriod, type ObservedGroup, periodWords } from "../record/index.js";
+import { compileRule } from "../rule/index.js";
 import type { Ground } from "./central-path.js";
-import type { InputPlans } from "./inputs/input-plan.js";
-import { plannedInputs } from "./inputs/planned-inputs.js";
 import { refuseGap } from "./refusals.js";
 
 /** A ground, and where the fit's unknowns stand in it. */
 export interface FitGround extends Ground {
   readonly group: GroupFit;
   readonly recorded: ObservedGroup;
-  /** Step index of the last recorded value. */
+  /** Index of the period that the future starts after: of the last recorded value, unless an earlier one was asked for. */
   readonly recordEnd: number;
   /** By unknown of the fit: slot among parameters, then state vector; -1 where the path does not begin with it. */
   readonly places: Int32Array;
@@ -21,12 +20,19 @@ export interface FitGround extends Ground {
 /**
  * Where the future of a fitted group begins: a trajectory at its own start, a chain of steps at the last recorded value.
  *
- * @param periods - beyond the last recorded one.
+ * @param periods - beyond the one that the future starts after.
+ * @param startsAfter - index of that period; default the last recorded one.
  */
-export function fitGround(fit: Fit, group: GroupFit, periods: number, plans: InputPlans): FitGround {
+export function fitGround(
+  fit: Fit,
+  group: GroupFit,
+  periods: number,
+  plans: InputPlans,
+  startsAfter?: number,
+): FitGround {
   const { rule, observations } = fit;
   const recorded = observations.groups.find((each) => each.name === group.group)!;
-  const recordEnd = recorded.index[recorded.index.length - 1]!;
+  const recordEnd = startsAfter ?? recorded.index[recorded.index.length - 1]!;
   const trajectory = fit.options.errors === "observation";
   const reach = Math.max(0, ...rule.lags.map(({ lag }) => lag));
   const from = trajectory ? reach : recordEnd;
@@ -49,7 +55,14 @@ export function fitGround(fit: Fit, group: GroupFit, periods: number, plans: Inp
     compiled: compileRule(rule),
     parameters: Float64Array.from(rule.parameters, (name) => group.parameters[name]!),
     initial,
-    inputs: fittedInputs(rule, recorded, recordEnd, periods, plans),
+    inputs: plannedInputs(rule, plans, {
+      axis: recorded.axis,
+      group: group.group,
+      recorded: (input) => inputByPeriod(recorded, input),
+      from,
+      first: recordEnd + 1,
+      last: recordEnd + periods,
+    }),
     from,
     periods: recordEnd + periods - from,
     group,
@@ -79,27 +92,6 @@ function fittedStart(fit: Fit, group: GroupFit, name: string, state: string, lag
 function recordedAt(recorded: ObservedGroup, state: string, period: number): number {
   const row = recorded.index.indexOf(period);
   const value = row < 0 ? Number.NaN : recorded.values[state]![row]!;
-  if (!Number.isFinite(value)) throw refuseGap(state, period);
+  if (!Number.isFinite(value)) throw refuseGap(state, periodWords(recorded.axis, period));
   return value;
-}
-
-function fittedInputs(
-  rule: Rule,
-  recorded: ObservedGroup,
-  recordEnd: number,
-  periods: number,
-  plans: InputPlans,
-): readonly Float64Array[] {
-  return plannedInputs(rule, plans, {
-    recorded: (input) => {
-      const column = new Float64Array(recordEnd + 1).fill(Number.NaN);
-      recorded.index.forEach((period, row) => {
-        column[period] = recorded.inputs[input]?.[row] ?? Number.NaN;
-      });
-      return column;
-    },
-    rows: recordEnd + 1,
-    last: recordEnd + periods,
-    firstNumber: 1,
-  });
 }

@@ -1,5 +1,6 @@
 import type { Fit, GroupFit } from "../estimate/index.js";
 import { type RandomStream, reporter } from "../numeric/index.js";
+import { indexOf, labelAt, labelsAt, periodWords } from "../record/index.js";
 import { dependsOnPeriod } from "../rule/index.js";
 import { type CentralPath, centralPath, stateLimits } from "./central-path.js";
 import { keepLimit } from "./check-run.js";
@@ -14,10 +15,9 @@ import type { Scenario } from "./inputs/scenarios.js";
 import { fittedNoise } from "./noise/fitted-noise.js";
 import { noiseDraw } from "./noise/noise.js";
 import { type DrawnStarts, drawnStarts, type UnknownsDraw, unknownsDraw } from "./parameters/drawn-starts.js";
-import { periodLabels } from "./period-labels.js";
 import { type Predictability, predictabilityOf } from "./predictability.js";
 import type { GroupForecast } from "./projected-group.js";
-import { refuseNoPath } from "./refusals.js";
+import { refuseFilteredStart, refuseFrom, refuseNoPath } from "./refusals.js";
 
 type Settled = ForecastOptions & ForecastSettings;
 
@@ -29,10 +29,23 @@ export function forecastGroup(
   options: Settled,
   stream: RandomStream,
 ): readonly GroupForecast[] {
-  const grounds = scenarios.map(({ plans }) => fitGround(fit, group, options.periods, plans));
+  const after = startsAfter(fit, group, options.from);
+  const grounds = scenarios.map(({ plans }) => fitGround(fit, group, options.periods, plans, after));
   const source = unknownsDraw(fit, group);
   const seeds = blockStreams(stream, options.paths);
   return grounds.map((ground, i) => projected(fit, ground, scenarios[i]!, options, source, seeds));
+}
+
+/** The index of the period to start after; undefined for the last recorded one. */
+function startsAfter(fit: Fit, { group }: GroupFit, from: ForecastOptions["from"]): number | undefined {
+  if (from === undefined) return undefined;
+  const { axis, index } = fit.observations.groups.find(({ name }) => name === group)!;
+  const last = index[index.length - 1]!;
+  const found = indexOf(axis, from);
+  if (found === undefined || found < 0 || found > last)
+    throw refuseFrom(from, labelAt(axis, 0), labelAt(axis, last));
+  if (fit.options.errors === "both" && found < last) throw refuseFilteredStart(from);
+  return found;
 }
 
 function projected(
@@ -59,16 +72,16 @@ function projected(
   const predictability = predicted(ground, starts, means[0]!.standardDeviation[ahead]!);
   const shown = withHorizon(central, predictability, recordEnd - from);
   const index = Array.from({ length: periods + 1 }, (_, t) => from + t);
-  const step = observations.period.step.every;
-  const labels = periodLabels(observations, ground.recorded, index);
-  const time = index.map((t) => ground.recorded.time[0]! + t * step);
+  const { axis, time: recordedTime } = ground.recorded;
+  const time = index.map((t) => recordedTime[0]! + t * axis.step.every);
   return {
     group: group.group,
     scenario: scenario.name,
     plans: scenario.plans,
+    axis,
     index,
     time,
-    ...(labels && { labels }),
+    ...(axis.counts !== "numbers" && { labels: labelsAt(axis, index) }),
     recordEnd,
     states: rule.states.map((state, s) => ({
       state,
@@ -93,7 +106,7 @@ function projected(
       starts,
       central: { ...central, values: shown },
       scenario: scenario.name,
-      period: (row) => labels?.[row] ?? `${observations.period.unit} ${Number(time[row]!.toPrecision(6))}`,
+      period: (row) => periodWords(axis, from + row),
       left,
       predictability,
       ground,

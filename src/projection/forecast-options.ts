@@ -1,13 +1,15 @@
+import type { InputPlans } from "../dynamics/index.js";
 import type { RunHooks } from "../numeric/index.js";
 import type { Watch } from "./ensemble/passage.js";
-import type { InputPlans } from "./inputs/input-plan.js";
 import type { Scenarios } from "./inputs/scenarios.js";
 
 /** Options of `forecast`. */
 export interface ForecastOptions extends RunHooks {
   /** Whole periods beyond the last recorded one. */
   readonly periods: number;
-  /** By input, the first period ahead first; needed for every input of the rule. */
+  /** The recorded period to start after, by its label or number; default the last one. */
+  readonly from?: string | number;
+  /** By input, the first period ahead first; needed for every input that the record does not hold so far ahead. */
   readonly inputs?: InputPlans;
   /** Several plans of inputs side by side, run with the same random numbers. */
   readonly scenarios?: Scenarios;

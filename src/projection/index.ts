@@ -15,8 +15,6 @@ export {
 export { type FitGround, fitGround } from "./fit-ground.js";
 export { type Forecast, forecast } from "./forecast.js";
 export type { ForecastOptions } from "./forecast-options.js";
-export type { InputPlan, InputPlans } from "./inputs/input-plan.js";
-export { plannedInputs } from "./inputs/planned-inputs.js";
 export type { Scenarios } from "./inputs/scenarios.js";
 export { fittedNoise } from "./noise/fitted-noise.js";
 export { type Noise, type NoiseDraw, noiseDraw } from "./noise/noise.js";

@@ -17,7 +17,7 @@ export { quantitiesAt } from "./quantities-at.js";
 export { recurrence } from "./recurrence.js";
 export type { RecurrenceOptions } from "./recurrence-options.js";
 export type { ProcessNoise, Rule } from "./rule.js";
-export { ruleLabel, ruleLabelWithText } from "./rule-label.js";
+export { ruleLabel, ruleLines } from "./rule-label.js";
 export { type RuleLanguage, ruleLanguage } from "./rule-language.js";
 export { ruleText } from "./rule-text.js";
 export {

@@ -22,7 +22,8 @@ export function makeRule(text: string, options: RecurrenceOptions, named?: Named
   const { checked } = definition;
   checkOptions(checked, options);
   const first = checked.statements.find(({ kind }) => kind !== "quantity")!;
-  const name = options.name?.trim().replace(/\s+/gu, " ") ?? (named && shortNames[named.name as keyof RuleCatalogue]);
+  const name =
+    options.name?.trim().replace(/\s+/gu, " ") ?? (named && shortNames[named.name as keyof RuleCatalogue]);
   const { units = {}, bounds = {}, start = {}, fixed = {}, initial = {}, noise = {} } = frozenCopy(options);
   const rule: Rule = {
     kind: "rule",

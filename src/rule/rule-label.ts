@@ -1,24 +1,20 @@
 import type { Rule } from "./rule.js";
 
 /**
- * What a rule is called in a title, table or sentence: its name, or its lines in one, without comments.
+ * What a rule is called in a title, table or sentence: its name, or its lines.
  *
  * @example ruleLabel(recurrence("ΔN = r*N*(1 - N/K)", { name: "crowding" })); // "crowding"
  */
-export function ruleLabel({ name, text }: Rule): string {
-  return name ?? oneLine(text);
+export function ruleLabel(rule: Rule): string {
+  return rule.name ?? ruleLines(rule);
 }
 
 /**
- * A rule's label, and its lines as well where the label is a name.
+ * The lines of a rule in one, without comments.
  *
- * @example ruleLabelWithText(recurrence("N[t+1] = R*N", { name: "growth" })); // "growth (N[t+1] = R*N)"
+ * @example ruleLines(recurrence("births = R*N   # a year\nN[t+1] = births")); // "births = R*N; N[t+1] = births"
  */
-export function ruleLabelWithText({ name, text }: Rule): string {
-  return name === undefined ? oneLine(text) : `${name} (${oneLine(text)})`;
-}
-
-function oneLine(text: string): string {
+export function ruleLines({ text }: Rule): string {
   const lines = text.split("\n").map((line) => line.replace(/#.*/u, "").trim());
   return lines.filter((line) => line !== "").join("; ");
 }

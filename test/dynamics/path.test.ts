@@ -64,7 +64,7 @@ test("inputs must reach as far as the path, and at [t+1] one further", () => {
   expect(() =>
     trajectory(rule, { initial: { owed: 10 }, inputs: { paid: [0, 1, 2, 3] }, periods: 4 }),
   ).toThrowErrorMatchingInlineSnapshot(
-    `[ModelError: The input "paid" is needed at period 4, and the values given reach from period 0 to 3. Give values for every period of the path, or shorten it.]`,
+    `[ModelError: Invalid plan for \`paid\`: it has 4 values and the projection needs 5. Give one for each period, or { usual, from, at }.]`,
   );
 });
 

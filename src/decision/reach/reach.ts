@@ -57,7 +57,7 @@ export interface GroupReach {
 /** When a state reaches a value, with its margin. */
 export type TimeToReach = CrossedLevel & {
   readonly kind: "time-to-reach";
-  /** The rule's text. */
+  /** The rule by its name, or by its lines. */
   readonly rule: string;
   readonly state: string;
   readonly unit: string;

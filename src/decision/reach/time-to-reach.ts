@@ -1,5 +1,5 @@
 import { crossedLevel, type Forecast, levelSide, type Simulation } from "../../projection/index.js";
-import { nonsmoothCalls, type Rule } from "../../rule/index.js";
+import { nonsmoothCalls, type Rule, ruleLabel } from "../../rule/index.js";
 import { refuseFewUnits, refuseLevel, refuseStateUnknown, refuseTarget } from "../refusals.js";
 import { acrossUnits } from "./across-units.js";
 import { groupReach } from "./group-reach.js";
@@ -58,7 +58,7 @@ function questionOf(ahead: Forecast | Simulation, rule: Rule, options: TimeToRea
   if (!(level > 0 && level < 1)) throw refuseLevel(level);
   const period = ahead.kind === "forecast" ? ahead.fit.observations.period.unit : ahead.options.period;
   return {
-    rule: rule.text,
+    rule: ruleLabel(rule),
     state,
     unit: ahead.groups[0]!.states.find((each) => each.state === state)!.unit,
     periodUnit: period,

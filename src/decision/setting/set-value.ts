@@ -1,4 +1,5 @@
-import type { Ground, InputPlan } from "../../projection/index.js";
+import type { InputPlan } from "../../dynamics/index.js";
+import type { Ground } from "../../projection/index.js";
 import { type Standing, stateOf } from "./standing.js";
 
 /** Something that can be set: a parameter, a first value "N[0]", or the usual level of an input. */

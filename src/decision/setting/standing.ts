@@ -1,4 +1,14 @@
-import { type InitialValues, initialVector, parametersBySlot } from "../../dynamics/index.js";
+import {
+  type InitialValues,
+  type InputPlans,
+  initialFrom,
+  initialVector,
+  inputsFrom,
+  parametersBySlot,
+  planOfGroup,
+  runStart,
+  type StartOptions,
+} from "../../dynamics/index.js";
 import type { Fit } from "../../estimate/index.js";
 import { type RunHooks, type Tick, ticker } from "../../numeric/index.js";
 import {
@@ -6,31 +16,27 @@ import {
   fitGround,
   fittedNoise,
   type Ground,
-  type InputPlans,
   type Noise,
-  plannedInputs,
   ruleNoise,
 } from "../../projection/index.js";
+import type { PeriodAxis } from "../../record/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../../rule/index.js";
 import type { MeasureUnits } from "../measure/measure.js";
 import { refuseGroup } from "../refusals.js";
 
 /** What a decision is worked out from, beside the rule or fit itself. */
-export interface StandingOptions extends RunHooks {
+export interface StandingOptions extends StartOptions, RunHooks {
   /** Whole periods ahead. */
   readonly periods: number;
   /** By input: its plan. For a fit the first period ahead comes first, for a rule period 0. */
   readonly inputs?: InputPlans;
-  /** Of a fit with several groups: which one. */
+  /** Of a fit or a record with several groups: which one. */
   readonly group?: string;
   /** Of a rule: its parameters and first values. */
   readonly parameters?: Readonly<Record<string, number>>;
   readonly initial?: InitialValues;
   /** Of a rule: random change by state, for probabilities. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** Of a rule: what a period is called, and what the present one is numbered; default "period" and 0. */
-  readonly period?: string;
-  readonly startsAt?: number;
   /** Paths for probabilities and margins; default 2000. */
   readonly paths?: number;
   /** Default 1. */
@@ -46,6 +52,7 @@ export interface Standing extends MeasureUnits {
   readonly fitGround: FitGround | undefined;
   /** Row of the path that is the present; what is ahead begins one row later. */
   readonly present: number;
+  readonly axis: PeriodAxis;
   /** The period column's value at a row. */
   readonly timeAt: (row: number) => number;
   readonly change: readonly (Noise | undefined)[];
@@ -80,18 +87,22 @@ function fitStanding(fit: Fit, options: StandingOptions): Standing {
   const group = fit.groups.find((each) => each.group === (options.group ?? names[0]));
   if (group === undefined) throw refuseGroup(options.group, names);
   const planned = (plans: InputPlans): FitGround => fitGround(fit, group, options.periods, plans);
-  const ground = planned(options.inputs ?? {});
+  const plans = Object.fromEntries(
+    Object.entries(options.inputs ?? {}).map(([name, plan]) => [name, planOfGroup(name, plan, group.group)]),
+  );
+  const ground = planned(plans);
   const first = ground.recorded.time[0]!;
-  const step = observations.period.step.every;
+  const { axis } = ground.recorded;
   return {
     rule,
     fit,
     ground,
     fitGround: ground,
     present: ground.recordEnd - ground.from,
-    timeAt: (row) => first + (ground.from + row) * step,
+    axis,
+    timeAt: (row) => first + (ground.from + row) * axis.step.every,
     change: fittedNoise(fit, group).change,
-    plans: options.inputs ?? {},
+    plans,
     paths: options.paths ?? 2000,
     seed: options.seed ?? 1,
     tick: ticker(options, runsOfFit),
@@ -100,26 +111,30 @@ function fitStanding(fit: Fit, options: StandingOptions): Standing {
       const state = stateOf(name);
       return observations.states.find((each) => each.name === state)?.unit || (rule.units[state] ?? "");
     },
-    periodUnit: observations.period.unit,
+    periodUnit: axis.unit,
   };
 }
 
 function ruleStanding(rule: Rule, options: StandingOptions): Standing {
   const { periods } = options;
   const parameters = parametersBySlot(rule, options.parameters);
-  const initial = initialVector(rule, options.initial);
+  const start = runStart(options);
+  const { axis, from, recorded } = start;
+  const initial = initialVector(rule, initialFrom(rule, start, options.initial));
   const compiled = compileRule(rule);
   const planned = (plans: InputPlans): Ground => {
-    const inputs = plannedInputs(rule, plans, { recorded: () => [], rows: 0, last: periods, firstNumber: 0 });
-    return { rule, compiled, parameters, initial, inputs, from: 0, periods };
+    const inputs = inputsFrom(rule, start, periods, plans);
+    return { rule, compiled, parameters, initial, inputs, from, periods };
   };
+  const first = recorded?.time[0] ?? (axis.counts === "numbers" ? axis.origin : 0);
   return {
     rule,
     fit: undefined,
     ground: planned(options.inputs ?? {}),
     fitGround: undefined,
     present: 0,
-    timeAt: (row) => row + (options.startsAt ?? 0),
+    axis,
+    timeAt: (row) => first + (from + row) * axis.step.every,
     change: ruleNoise(rule, parameters, options.noise),
     plans: options.inputs ?? {},
     paths: options.paths ?? 2000,
@@ -127,6 +142,6 @@ function ruleStanding(rule: Rule, options: StandingOptions): Standing {
     tick: ticker(options, runsOfRule),
     planned,
     unitOf: (name) => rule.units[stateOf(name)] ?? "",
-    periodUnit: options.period ?? "period",
+    periodUnit: axis.unit,
   };
 }

@@ -1,5 +1,5 @@
 import type { Fit } from "../../estimate/index.js";
-import type { Rule } from "../../rule/index.js";
+import { type Rule, ruleLabel } from "../../rule/index.js";
 
 /** The record that an answer stands on: "the record of 58 values to hour 240". */
 function recordWords(fit: Fit): string {
@@ -17,16 +17,23 @@ function recordWords(fit: Fit): string {
 /** Longest rule that is named in a sentence. */
 const longest = 60;
 
+/** " "crowding"", or " N[t+1] = R*N": a rule behind the word, where it is short enough to be read there. */
+function ruleWords(rule: Rule): string {
+  const label = ruleLabel(rule);
+  if (label.length > longest || label.includes(";")) return "";
+  return rule.name === undefined ? ` ${label}` : ` "${label}"`;
+}
+
 /** What must hold for an answer: the record's going on, or the rule; and inputs that go as planned. */
 export function conditionWords(rule: Rule, fit: Fit | undefined): string {
   const planned =
     rule.inputs.length === 0
       ? ""
       : `${rule.inputs.join(" and ")} ${rule.inputs.length === 1 ? "goes" : "go"} as planned and `;
-  const short = rule.text.length <= longest && !rule.text.includes("\n");
+  const named = ruleWords(rule);
   if (fit !== undefined)
-    return `${planned}it goes on as in ${recordWords(fit)}${short ? `, by the rule ${rule.text}` : ""}`;
-  return `${planned}the rule${short ? ` ${rule.text}` : ""}${rule.parameters.length === 0 ? " holds" : " and its parameters hold"}`;
+    return `${planned}it goes on as in ${recordWords(fit)}${named && `, by the rule${named}`}`;
+  return `${planned}the rule${named}${rule.parameters.length === 0 ? " holds" : " and its parameters hold"}`;
 }
 
 /** How a group is named: "flask B", or "N" where there is a single one. */

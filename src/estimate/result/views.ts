@@ -1,3 +1,4 @@
+import { ruleLabel } from "../../rule/index.js";
 import type { Fit } from "../fit.js";
 import type { Estimate } from "./estimate-of.js";
 import type { FitPoint } from "./fit-points.js";
@@ -14,8 +15,13 @@ export function estimates(fit: Fit): readonly EstimateRow[] {
   );
 }
 
+/** A row of the points view: one compared value of one group. */
+export interface PointRow extends FitPoint {
+  readonly group: string;
+}
+
 /** Every residual of every group of a fit. */
-export function points(fit: Fit): readonly (FitPoint & { readonly group: string })[] {
+export function points(fit: Fit): readonly PointRow[] {
   return fit.groups.flatMap((group) => group.points.map((point) => ({ group: group.group, ...point })));
 }
 
@@ -37,7 +43,7 @@ export interface SummaryRow {
 export function summary(fit: Fit): readonly SummaryRow[] {
   return fit.groups.map((group) => ({
     group: group.group,
-    rule: fit.rule.text,
+    rule: ruleLabel(fit.rule),
     count: group.count,
     parameters: group.estimates.length,
     sumOfSquares: group.sumOfSquares,

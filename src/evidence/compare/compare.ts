@@ -5,6 +5,7 @@ import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseOneFit, refuseUnlikeErrors, refuseUnlikeRecords, refuseUnlikeStarts } from "../refusals.js";
 import { type ComparisonRow, comparisonRows } from "./comparison-row.js";
 import { type ComparisonVerdict, comparisonVerdict } from "./comparison-verdict.js";
+import { fitLabels } from "./fit-labels.js";
 import { type LikelihoodRatio, likelihoodRatios } from "./likelihood-ratio.js";
 
 /** Options of `compare`. */
@@ -21,6 +22,7 @@ export interface CompareOptions extends RunHooks {
 
 /** What one rival leads to. */
 export interface RivalDecision {
+  /** What the comparison calls the rival. */
   readonly rule: string;
   readonly decision: string;
 }
@@ -60,14 +62,15 @@ export function compare(fits: readonly Fit[], options: CompareOptions = {}): Com
   for (const other of fits.slice(1)) refuseUnlike(first, other);
   for (const fit of fits) refuseExact(fit);
   const scalesDiffer = new Set(fits.map((fit) => fit.options.distribution ?? "normal")).size > 1;
-  const rows = comparisonRows(fits, scalesDiffer);
+  const labels = fitLabels(fits);
+  const rows = comparisonRows(fits, labels, scalesDiffer);
   const rolled = rollingOrigin(fits, planOf(first, options));
   const { verdict, standing, sentence } = comparisonVerdict(fits, rows, rolled);
   const decisions = decisionsOf(fits, standing, options.decide);
   return {
     kind: "comparison",
     rows,
-    likelihoodRatios: likelihoodRatios(fits),
+    likelihoodRatios: likelihoodRatios(fits, labels),
     rollingOrigin: rolled,
     verdict,
     decisions,
@@ -104,7 +107,10 @@ function refuseUnlike(first: Fit, other: Fit): void {
         group.points.every((point, i) => point.observed === twin.points[i]!.observed)
       );
     });
-  if (!same) throw refuseUnlikeRecords(first.rule.text, other.rule.text);
+  if (!same) {
+    const [one, two] = fitLabels([first, other]);
+    throw refuseUnlikeRecords(one!, two!);
+  }
 }
 
 function decisionsOf(

@@ -4,6 +4,7 @@ import type { Fit } from "../../estimate/index.js";
 export interface ComparisonRow {
   /** Which of the fits given, from 0. */
   readonly place: number;
+  /** What the rival is called: its rule, and what else tells it from the others. */
   readonly rule: string;
   /** n: values compared, of all groups. */
   readonly count: number;
@@ -30,9 +31,13 @@ type GroupFit = Fit["groups"][number];
  *
  * @param ownScale - brings fits on the log scale back to the record's own by the Jacobian, -sum ln y.
  */
-export function comparisonRows(fits: readonly Fit[], ownScale: boolean): readonly ComparisonRow[] {
+export function comparisonRows(
+  fits: readonly Fit[],
+  labels: readonly string[],
+  ownScale: boolean,
+): readonly ComparisonRow[] {
   const raw = fits
-    .map((fit, place) => rowOf(fit, place, ownScale))
+    .map((fit, place) => ({ ...rowOf(fit, place, ownScale), rule: labels[place]! }))
     .sort((a, b) => a.aicCorrected - b.aicCorrected);
   const lowest = raw[0]!.aicCorrected;
   const weight = (row: { aicCorrected: number }): number => Math.exp((lowest - row.aicCorrected) / 2) || 0;
@@ -40,14 +45,17 @@ export function comparisonRows(fits: readonly Fit[], ownScale: boolean): readonl
   return raw.map((row) => ({ ...row, difference: row.aicCorrected - lowest, weight: weight(row) / total }));
 }
 
-function rowOf(fit: Fit, place: number, ownScale: boolean): Omit<ComparisonRow, "difference" | "weight"> {
+function rowOf(
+  fit: Fit,
+  place: number,
+  ownScale: boolean,
+): Omit<ComparisonRow, "rule" | "difference" | "weight"> {
   const sum = (of: (group: GroupFit) => number): number =>
     fit.groups.reduce((total, group) => total + of(group), 0);
   const jacobian = ownScale && fit.options.distribution === "lognormal" ? sum(logOfValues) : 0;
   const logLikelihood = sum((group) => group.criteria.logLikelihood) - jacobian;
   return {
     place,
-    rule: fit.rule.text,
     count: sum((group) => group.count),
     parameters: sum((group) => group.estimates.length),
     sumOfSquares: sum((group) => group.sumOfSquares),

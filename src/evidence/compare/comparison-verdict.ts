@@ -8,7 +8,7 @@ import { naiveCriteria } from "./naive-criteria.js";
 /** What a comparison comes to. */
 export interface ComparisonVerdict {
   readonly kind: "supported" | "undecided" | "none-adequate";
-  /** The rule, or the rules not told apart; empty where none is adequate. */
+  /** The rule, or the rules not told apart, as the comparison calls them; empty where none is adequate. */
   readonly rules: readonly string[];
 }
 

@@ -25,28 +25,36 @@ export interface LikelihoodRatio {
  * @see Wilks, S. S. (1938), Annals of Mathematical Statistics 9; on the edge Self, S. G. and Liang, K.-Y. (1987),
  *   Journal of the American Statistical Association 82.
  */
-export function likelihoodRatios(fits: readonly Fit[]): readonly LikelihoodRatio[] {
-  return fits.flatMap((smaller) =>
-    fits.flatMap((larger) => {
+export function likelihoodRatios(
+  fits: readonly Fit[],
+  labels: readonly string[],
+): readonly LikelihoodRatio[] {
+  return fits.flatMap((smaller, s) =>
+    fits.flatMap((larger, l) => {
       if (smaller === larger || smaller.options.distribution !== larger.options.distribution) return [];
       const nesting = nestingOf(smaller, larger);
-      return nesting ? [ratioOf(smaller, larger, nesting.at)] : [];
+      return nesting ? [ratioOf(smaller, larger, [labels[s]!, labels[l]!], nesting.at)] : [];
     }),
   );
 }
 
-function ratioOf(smaller: Fit, larger: Fit, at: Readonly<Record<string, number>>): LikelihoodRatio {
+function ratioOf(
+  smaller: Fit,
+  larger: Fit,
+  names: readonly [string, string],
+  at: Readonly<Record<string, number>>,
+): LikelihoodRatio {
   const total = (fit: Fit): number =>
     fit.groups.reduce((sum, group) => sum + group.criteria.logLikelihood, 0);
   const statistic = Math.max(0, 2 * (total(larger) - total(smaller)));
-  const names = Object.keys(at);
-  const degreesOfFreedom = names.length * larger.groups.length;
+  const extra = Object.keys(at);
+  const degreesOfFreedom = extra.length * larger.groups.length;
   const bounds = { ...larger.rule.bounds, ...larger.options.bounds };
-  const edge = names.filter((name) => bounds[name]?.includes(at[name]!));
+  const edge = extra.filter((name) => bounds[name]?.includes(at[name]!));
   const probability = edge.length > 0 ? undefined : 1 - chiSquareCdf(statistic, degreesOfFreedom);
   const base = {
-    smaller: smaller.rule.text,
-    larger: larger.rule.text,
+    smaller: names[0],
+    larger: names[1],
     at,
     statistic,
     degreesOfFreedom,

@@ -1,5 +1,5 @@
 import { type Fit, type GroupFit, unknownsOf } from "../../estimate/index.js";
-import type { ObservedGroup } from "../../record/index.js";
+import { inputByPeriod, type ObservedGroup } from "../../record/index.js";
 import { compileRule, type Rule } from "../../rule/index.js";
 import { carryVariance, spreadOf } from "./carry-variance.js";
 
@@ -78,9 +78,7 @@ function lastValues(rule: Rule, group: ObservedGroup): Float64Array | undefined 
 function inputColumns(rule: Rule, group: ObservedGroup, last: number): readonly Float64Array[] {
   return rule.inputs.map((name) => {
     const column = new Float64Array(last + 1).fill(Number.NaN);
-    group.index.forEach((period, row) => {
-      if (period <= last) column[period] = group.inputs[name]?.[row] ?? Number.NaN;
-    });
+    column.set(inputByPeriod(group, name).subarray(0, last + 1));
     return column;
   });
 }

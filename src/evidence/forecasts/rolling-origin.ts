@@ -1,6 +1,7 @@
 import type { Fit } from "../../estimate/index.js";
 import type { Tick } from "../../numeric/index.js";
 import type { ObservedGroup } from "../../record/index.js";
+import { fitLabels } from "../compare/fit-labels.js";
 import { type ForecastScores, type Scored, scoresOf } from "./forecast-scores.js";
 import { type NaiveForecast, naiveForecasts } from "./naive-forecasts.js";
 import type { Prediction } from "./predict-ahead.js";
@@ -65,7 +66,7 @@ export function rollingOrigin(fits: readonly Fit[], plan: OriginPlan): RollingOr
   });
   const scored = made.flat();
   if (scored.length === 0) return undefined;
-  const names = [...fits.map((fit) => fit.rule.text), ...naive.map((each) => each.name)];
+  const names = [...fitLabels(fits), ...naive.map((each) => each.name)];
   const scores = names.map((name, i) =>
     scoresOf(
       name,

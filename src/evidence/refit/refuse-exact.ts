@@ -1,4 +1,5 @@
 import type { Fit } from "../../estimate/index.js";
+import { ruleLabel } from "../../rule/index.js";
 import { refuseExactFit } from "../refusals.js";
 
 /** Residuals below this share of the values are rounding of double precision, not scatter. */
@@ -11,5 +12,5 @@ export function refuseExact(fit: Fit): void {
     const scale = log ? 1 : points.reduce((most, { observed }) => Math.max(most, Math.abs(observed)), 0);
     return points.every(({ residual }) => Math.abs(residual) <= rounding * scale);
   });
-  if (exact !== undefined) throw refuseExactFit(fit.rule.text, exact.group);
+  if (exact !== undefined) throw refuseExactFit(ruleLabel(fit.rule), exact.group);
 }

@@ -1,6 +1,5 @@
 import { gammaDraw, poissonDraw, type RandomStream } from "../../numeric/index.js";
 
-
 /**
  * How a value scatters around what the rule gives, by distribution. `normal`: of the given standard deviation, in the
  * state's unit. `lognormal`: a factor exp(sd z) of median 1, as in a fit; with `centre: "mean"` a factor

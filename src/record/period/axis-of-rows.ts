@@ -92,14 +92,16 @@ function wholeForm({ step: { of, every, begins } }: Calendar, form: PeriodForm):
 }
 
 /**
- * The day of the month that more than half of the dates share, where a date at the end of a shorter month agrees with
- * every later day; 31 means the last day. Undefined where there is none, or the dates lie in unlike months of their
+ * The day of the month that all dates share; else the one that more than half of them share, where a date at the end
+ * of a shorter month agrees with every later day, and 31 means the last day. Undefined where there is none, or the dates lie in unlike months of their
  * quarters or years.
  */
 function dayOf(dates: readonly Moment[], { name }: Calendar, months: number): number | undefined {
   const ofPeriod = (date: Moment): number => ((monthOf(date) % months) + months) % months;
   if (dates.some((date) => ofPeriod(date) !== ofPeriod(dates[0]!))) return undefined;
   if (name === "month-end") return 31;
+  const { day: first } = calendarDay(dates[0]!);
+  if (dates.every((date) => calendarDay(date).day === first)) return first;
   const agreeing = new Array<number>(32).fill(0);
   for (const date of dates) {
     const { day } = calendarDay(date);

@@ -50,6 +50,11 @@ export function labelsAt(axis: PeriodAxis, indexes: ArrayLike<number>): readonly
   return Array.from(indexes, (index) => labelAt(axis, index));
 }
 
+/** A period in a sentence: "month 33", or its label where periods are not mere numbers. */
+export function periodWords(axis: PeriodAxis, index: number): string {
+  return axis.counts === "numbers" ? `${axis.unit} ${labelAt(axis, index)}` : labelAt(axis, index);
+}
+
 function momentAt({ counts, origin, stride, day = 1, clock = 0 }: PeriodAxis, index: number): Moment {
   const at = origin + index * stride;
   return counts === "months" ? clampedDate(at, day) + clock : at;

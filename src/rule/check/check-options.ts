@@ -26,10 +26,12 @@ function optionValueError(option: string, name: string, wanted: string, given: u
   );
 }
 
-function nameOptionError(given: unknown): ModelError {
-  return new ModelError(
+function checkName(name: unknown): void {
+  if (name === undefined || (typeof name === "string" && name.trim() !== "")) return;
+  const given = JSON.stringify(name) ?? String(name);
+  throw new ModelError(
     "unreadable-option",
-    `Option \`name\` must be a text; ${JSON.stringify(given) ?? String(given)} was given. Write \`name: "crowding"\`.`,
+    `Option \`name\` must be a text; ${given} was given. Write \`name: "crowding"\`.`,
     { option: "name", given },
   );
 }
@@ -97,8 +99,7 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
 
 /** Refuses options that speak of names the rule has not, or give values that fit no meaning. */
 export function checkOptions(rule: CheckedRule, options: RecurrenceOptions): void {
-  const { name } = options;
-  if (name !== undefined && (typeof name !== "string" || name.trim() === "")) throw nameOptionError(name);
+  checkName(options.name);
   for (const { option, what, names, expected, accepts } of checks(rule)) {
     for (const [name, value] of Object.entries(options[option] ?? {})) {
       if (!names.includes(name)) throw unknownOptionNameError(option, name, names, what);
