@@ -6,7 +6,6 @@ import {
   changePoint as findChangePoint,
   densityDependence as testDensity,
 } from "../../src/evidence/index.js";
-import { frozenCopy } from "../../src/numeric/index.js";
 import type { Observations } from "../../src/record/index.js";
 import { type Rule, ruleLabel } from "../../src/rule/index.js";
 import { type Figure, figure, type Panel } from "../figures/index.js";
@@ -14,6 +13,7 @@ import { checkCall } from "../options/index.js";
 import type { ChangePoint } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { seededRun } from "./seeded-run.js";
 import { presentFitIn } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
 
@@ -31,7 +31,9 @@ export function changePoint(
   options: ChangePointOptions = {},
 ): ChangePoint {
   checkCall("changePoint", arguments);
-  const looked = findChangePoint(rule, observations, { seed: caseLog.seed(), ...frozenCopy(options) });
+  const looked = seededRun("Records without a break", options, (own) =>
+    findChangePoint(rule, observations, own),
+  );
   caseLog.noteStep(`looked for a break in "${ruleLabel(rule)}": ${looked.sentence}`);
   return showing(presentFitIn(looked), () => shownTogether([breaksTable(looked), breaksFigure(looked)]));
 }
@@ -48,7 +50,7 @@ export function densityDependence(
   options: DensityOptions = {},
 ): DensityDependence {
   checkCall("densityDependence", arguments);
-  const tested = testDensity(observations, { seed: caseLog.seed(), ...frozenCopy(options) });
+  const tested = seededRun("Records drawn", options, (own) => testDensity(observations, own));
   caseLog.noteStep(`tested density dependence: ${tested.sentence}`);
   return showing(tested, () => shownTogether([densityTable(tested)]));
 }

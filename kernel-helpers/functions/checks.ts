@@ -1,12 +1,12 @@
 import type { Fit } from "../../src/estimate/index.js";
 import { type CheckOptions, check as checkFit, type Check as EngineCheck } from "../../src/evidence/index.js";
-import { frozenCopy } from "../../src/numeric/index.js";
 import { ruleLabel } from "../../src/rule/index.js";
 import { checkCall } from "../options/index.js";
 import type { Check } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { residualPanels } from "./residual-panels.js";
+import { seededRun } from "./seeded-run.js";
 import { presentFitIn } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
 
@@ -20,7 +20,7 @@ import { shownTogether } from "./shown-together.js";
  */
 export function check(fit: Fit, options: CheckOptions = {}): Check {
   checkCall("check", arguments);
-  const checked = checkFit(fit, { seed: caseLog.seed(), ...frozenCopy(options) });
+  const checked = seededRun("Checks", options, (own) => checkFit(fit, own));
   caseLog.noteStep(`checked "${ruleLabel(fit.rule)}": ${checked.sentence}`);
   return showing(presentFitIn(checked), () =>
     shownTogether([

@@ -10,11 +10,11 @@ import {
   tradeoff as tradeoffOf,
 } from "../../src/decision/index.js";
 import type { Fit } from "../../src/estimate/index.js";
-import { frozenCopy } from "../../src/numeric/index.js";
 import type { Rule } from "../../src/rule/index.js";
 import { checkCall } from "../options/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { seededRun } from "./seeded-run.js";
 import { showBest, showSensitivity, showTradeoff } from "./show-choices.js";
 import { shownTogether } from "./shown-together.js";
 
@@ -29,7 +29,7 @@ import { shownTogether } from "./shown-together.js";
  */
 export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum {
   checkCall("optimize", arguments);
-  const found = bestSetting(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
+  const found = seededRun("Optimum", options, (own) => bestSetting(subject, own));
   caseLog.noteStep(`asked which ${found.vary} is best for ${found.measure}`);
   return showing(found, () => shownTogether(showBest(found)));
 }
@@ -42,7 +42,7 @@ export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum
  */
 export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): Sensitivity {
   checkCall("sensitivity", arguments);
-  const found = sensitivityOf(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
+  const found = seededRun("Sensitivity", options, (own) => sensitivityOf(subject, own));
   caseLog.noteStep(`asked what ${found.measure} hangs on`);
   return showing(found, () => shownTogether(showSensitivity(found)));
 }
@@ -57,7 +57,7 @@ export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): S
  */
 export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeoff {
   checkCall("tradeoff", arguments);
-  const found = tradeoffOf(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
+  const found = seededRun("Choices", options, (own) => tradeoffOf(subject, own));
   caseLog.noteStep(`set ${found.rows.length} choices of ${found.vary} side by side`);
   return showing(found, () => shownTogether(showTradeoff(found)));
 }

@@ -16,6 +16,7 @@ import { checkCall } from "../options/index.js";
 import { type TimeToReach, withSingleReach } from "../results/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { seededRun } from "./seeded-run.js";
 import { levelWords, showNextReading, showReach, showSolved } from "./show-decisions.js";
 import { shownTogether } from "./shown-together.js";
 
@@ -43,7 +44,7 @@ export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOp
  */
 export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
   checkCall("solveFor", arguments);
-  const found = solveForSetting(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
+  const found = seededRun("Solving", options, (own) => solveForSetting(subject, own));
   caseLog.noteStep(`asked what ${found.vary} brings ${found.measure} to its target`);
   return showing(found, () => shownTogether(showSolved(found)));
 }
@@ -56,7 +57,7 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
  */
 export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOptions): NextReading {
   checkCall("nextReading", arguments);
-  const found = nextReadingOf(fits, { seed: caseLog.seed(), ...frozenCopy(options) });
+  const found = seededRun("Next reading", options, (own) => nextReadingOf(fits, own));
   caseLog.noteStep(`asked which further reading of ${found.state} would ${found.purpose}`);
   return showing(found, () => shownTogether(showNextReading(found)));
 }

@@ -43,6 +43,7 @@ export function fit(rule: Rule, observations: Observations, options: FitOptions)
  * @example estimates(fitted)[0].name; // "R"
  */
 export function estimates(fit: EngineFit): readonly EstimateRow[] {
+  checkCall("estimates", arguments);
   return freezeDeep(estimatesOf(fit));
 }
 
@@ -52,6 +53,7 @@ export function estimates(fit: EngineFit): readonly EstimateRow[] {
  * @example points(fitted).length; // counts.groups[0].index.length
  */
 export function points(fit: EngineFit): readonly PointRow[] {
+  checkCall("points", arguments);
   return freezeDeep(pointsOf(fit));
 }
 
@@ -61,5 +63,6 @@ export function points(fit: EngineFit): readonly PointRow[] {
  * @example summary(fitted)[0].stop; // "converged"
  */
 export function summary(fit: EngineFit): readonly SummaryRow[] {
+  checkCall("summary", arguments);
   return freezeDeep(summaryOf(fit));
 }

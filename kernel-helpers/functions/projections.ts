@@ -1,5 +1,4 @@
 import type { Fit } from "../../src/estimate/index.js";
-import { frozenCopy } from "../../src/numeric/index.js";
 import {
   type ForecastOptions,
   forecast as forecastFit,
@@ -8,7 +7,6 @@ import {
 } from "../../src/projection/index.js";
 import { type Rule, ruleLabel } from "../../src/rule/index.js";
 import { checkCall } from "../options/index.js";
-import { withProgress } from "../progress/index.js";
 import {
   type Forecast,
   forecastWithValues,
@@ -17,6 +15,7 @@ import {
 } from "../results/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { seededRun } from "./seeded-run.js";
 import { presentFit } from "./show-fit.js";
 import { showForecast } from "./show-forecast.js";
 import { showSimulation } from "./show-simulation.js";
@@ -31,9 +30,7 @@ import { shownTogether } from "./shown-together.js";
  */
 export function forecast(fit: Fit, options: ForecastOptions): Forecast {
   checkCall("forecast", arguments);
-  const ahead = withProgress("Forecast", undefined, ({ at }) =>
-    forecastFit(fit, { seed: caseLog.seed(), onProgress: at, ...frozenCopy(options) }),
-  );
+  const ahead = seededRun("Forecast", options, (own) => forecastFit(fit, own));
   caseLog.noteStep(
     `forecast "${ruleLabel(fit.rule)}" over ${options.periods} periods, ${ahead.options.paths} paths`,
   );
@@ -52,9 +49,7 @@ export function forecast(fit: Fit, options: ForecastOptions): Forecast {
  */
 export function simulate(rule: Rule, options: SimulateOptions): Simulation {
   checkCall("simulate", arguments);
-  const run = withProgress("Simulation", undefined, ({ at }) =>
-    simulateRule(rule, { seed: caseLog.seed(), onProgress: at, ...frozenCopy(options) }),
-  );
+  const run = seededRun("Simulation", options, (own) => simulateRule(rule, own));
   caseLog.noteStep(
     `simulated "${ruleLabel(rule)}" over ${options.periods} periods, ${run.options.paths} paths`,
   );

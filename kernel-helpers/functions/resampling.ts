@@ -9,14 +9,13 @@ import {
   gridInterval as gridIntervalOf,
   type Interval,
 } from "../../src/estimate/index.js";
-import { frozenCopy } from "../../src/numeric/index.js";
 import type { Observations } from "../../src/record/index.js";
 import { ruleLabel } from "../../src/rule/index.js";
 import { checkCall } from "../options/index.js";
-import { withProgress } from "../progress/index.js";
 import type { UpdatedFit } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { seededRun } from "./seeded-run.js";
 import { presentFitIn } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
 
@@ -29,9 +28,7 @@ import { shownTogether } from "./shown-together.js";
  */
 export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
   checkCall("bootstrap", arguments);
-  const drawn = withProgress("Refits", undefined, ({ at }) =>
-    bootstrapFit(fit, { seed: caseLog.seed(), onProgress: at, ...frozenCopy(options) }),
-  );
+  const drawn = seededRun("Refits", options, (own) => bootstrapFit(fit, own));
   caseLog.noteStep(`bootstrap of "${ruleLabel(fit.rule)}" by ${drawn.errors} errors, ${drawn.used} refits`);
   return showing(drawn, () => shownTogether([bootstrapTable(fit, drawn)]));
 }
@@ -74,7 +71,7 @@ function bootstrapTable(fit: Fit, drawn: Bootstrap): Table {
  */
 export function gridInterval(fit: Fit, name: string, options: GridIntervalOptions = {}): Interval {
   checkCall("gridInterval", arguments);
-  const interval = gridIntervalOf(fit, name, { seed: caseLog.seed(), ...frozenCopy(options) });
+  const interval = seededRun("Simulated records", options, (own) => gridIntervalOf(fit, name, own));
   caseLog.noteStep(`interval of ${name} in "${ruleLabel(fit.rule)}" by simulation at every value`);
   return showing(interval, () => shownTogether([intervalTable(name, interval)]));
 }

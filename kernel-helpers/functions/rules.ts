@@ -25,11 +25,13 @@ export function recurrence(text: string, options: RecurrenceOptions = {}): Rule 
   return presentRule(readRule(text, options));
 }
 
-/** Wraps one maker of the catalogue so that its rule shows itself. */
-const showingItself =
-  <Options extends readonly unknown[]>(make: (...options: Options) => Rule) =>
-  (...options: Options): Rule =>
-    presentRule(make(...options));
+/** Wraps one maker of the catalogue: its options are checked, and its rule shows itself. */
+const presented =
+  <Options extends readonly unknown[]>(name: string, make: (...options: Options) => Rule) =>
+  (...options: Options): Rule => {
+    checkCall(`rules.${name}`, options);
+    return presentRule(make(...options));
+  };
 
 /**
  * The catalogue: rules that have a name. Each is called for its rule, which shows its range, rest levels, slopes,
@@ -42,7 +44,7 @@ export const rules: RuleCatalogue = showing(
   Object.fromEntries(
     Object.entries(namedRules).map(([name, make]) => [
       name,
-      showingItself(make as (options?: never) => Rule),
+      presented(name, make as (options?: never) => Rule),
     ]),
   ) as unknown as RuleCatalogue,
   () => shownTogether([catalogueTable()]),

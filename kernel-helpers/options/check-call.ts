@@ -4,6 +4,7 @@ import {
   argumentError,
   noOptionsError,
   optionError,
+  otherSubjectError,
   plainArgumentError,
   tooLargeError,
   tooManyArgumentsError,
@@ -51,6 +52,9 @@ function checkOptions(schema: FunctionSchema, given: readonly unknown[]): void {
   const options = value ?? {};
   const fault = shapeFault(shape!, options, []);
   if (fault !== undefined) throw optionError(fault, schema, options);
+  const subject = (given[0] as { kind?: unknown } | undefined)?.kind;
+  for (const [name, { of }] of Object.entries(shape!.fields))
+    if (of !== undefined && of !== subject && options[name] !== undefined) throw otherSubjectError(name, of);
   for (const size of sizes) checkSize(size, options, given);
 }
 

@@ -27,6 +27,7 @@ import {
   func,
   listOf,
   named,
+  only,
   optional,
   required,
   type Schema,
@@ -40,15 +41,18 @@ import { noise } from "./projection-schemas.js";
 type Shared = Omit<SensitivityOptions, "answer" | "vary">;
 
 const shared: Schema<Shared> = {
-  ...startOptions,
+  startsAt: only("rule", startOptions.startsAt),
+  period: only("rule", startOptions.period),
+  record: only("rule", startOptions.record),
+  group: startOptions.group,
   periods: required(whole(1, 24), "Whole periods ahead"),
   inputs: optional(
     plans,
     "By input: its plan; for a fit the first period ahead comes first, for a rule period 0",
   ),
-  parameters: optional(valuesByName, "Of a rule: its parameters by name"),
-  initial: optional(firstValues, "Of a rule: its first values by state"),
-  noise: optional(noise, "Of a rule: random change by state, for probabilities"),
+  parameters: only("rule", optional(valuesByName, "Of a rule: its parameters by name")),
+  initial: only("rule", optional(firstValues, "Of a rule: its first values by state")),
+  noise: only("rule", optional(noise, "Of a rule: random change by state, for probabilities")),
   paths: optional(whole(1, 2000), "Random paths for probabilities and margins", 2000),
   seed,
   onProgress,

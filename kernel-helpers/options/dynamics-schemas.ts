@@ -31,6 +31,7 @@ import {
   either,
   listOf,
   named,
+  only,
   optional,
   required,
   type Schema,
@@ -43,12 +44,23 @@ import { plans, startOptions } from "./plan-schemas.js";
 
 const takes = [ruleOrFit];
 
-const held: Schema<HeldSetting> = {
+/** What questions take of a fit besides the options of a rule. */
+interface OfFit {
+  readonly group?: string;
+}
+
+const group = only(
+  "fit",
+  optional(text("A", "the name of a group"), "Of a fit with several groups: which one"),
+);
+
+const held: Schema<HeldSetting & OfFit> = {
   parameters: optional(
     valuesByName,
     "Parameters by name; those that the rule holds fixed may be left out, and those of a fit are its estimates",
   ),
   inputs: optional(valuesByName, "By input: the value at which it stays"),
+  group,
 };
 
 const initial = optional(
@@ -77,7 +89,7 @@ const exactly: Value<ExactValue> = either(
   { kind: { is: "bigint" }, example: "1n" } as Value<bigint>,
 );
 
-const exactTrajectoryOptions: Schema<ExactTrajectoryOptions> = {
+const exactTrajectoryOptions: Schema<ExactTrajectoryOptions & OfFit> = {
   parameters: optional(
     named(exactly, '{ r: "1/3" }'),
     'Parameters by name: numbers, read as the decimals they print as, or texts such as "1/3"',
@@ -91,6 +103,7 @@ const exactTrajectoryOptions: Schema<ExactTrajectoryOptions> = {
     "By input: its values by period, period 0 first",
   ),
   periods: required(whole(0, 12), "Whole periods to run"),
+  group,
 };
 
 const exactTrajectorySchema: FunctionSchema = {
@@ -101,7 +114,7 @@ const exactTrajectorySchema: FunctionSchema = {
   sizes: [steppedPeriods],
 };
 
-const closedFormOptions: Schema<ClosedFormOptions> = {
+const closedFormOptions: Schema<ClosedFormOptions & OfFit> = {
   ...held,
   initial,
   digits: optional(whole(1, 10, 15), "Significant digits that `guaranteed` asks for", 10),
@@ -122,7 +135,7 @@ const range = optional(
   "the rule's bounds, else a million times the largest parameter either way",
 );
 
-const equilibriaOptions: Schema<EquilibriaOptions> = {
+const equilibriaOptions: Schema<EquilibriaOptions & OfFit> = {
   ...held,
   range,
   searches: optional(whole(1, 400, 1_000_000), "For systems: how many places the search starts from", 400),
@@ -135,7 +148,7 @@ const equilibriaSchema: FunctionSchema = {
   example: "equilibria(rule, { parameters: { r: 0.5, K: 1000 } })",
 };
 
-const cyclesOptions: Schema<CyclesOptions> = {
+const cyclesOptions: Schema<CyclesOptions & OfFit> = {
   ...held,
   period: required(whole(1, 2, 1000), "Periods until the values come round"),
   range,
@@ -150,7 +163,7 @@ const cyclesSchema: FunctionSchema = {
 
 const vary = required(text("r", "the name of a parameter"), "Parameter that is varied");
 
-const bifurcationsOptions: Schema<BifurcationsOptions> = {
+const bifurcationsOptions: Schema<BifurcationsOptions & OfFit> = {
   ...held,
   vary,
   range: required(pair, "Values that are followed, from the first to the second, up or down"),
@@ -170,7 +183,7 @@ const bifurcationsSchema: FunctionSchema = {
 
 const longest = 1e9;
 
-const lyapunovExponentOptions: Schema<LyapunovExponentOptions> = {
+const lyapunovExponentOptions: Schema<LyapunovExponentOptions & OfFit> = {
   ...held,
   initial,
   periods: optional(whole(300, 100_000, longest), "Periods measured, at least 300", 100_000),
@@ -187,7 +200,7 @@ const lyapunovExponentSchema: FunctionSchema = {
   example: "lyapunovExponent(rule, { parameters: { r: 3.9 }, initial: { x: 0.3 } })",
 };
 
-const predictionHorizonOptions: Schema<PredictionHorizonOptions> = {
+const predictionHorizonOptions: Schema<PredictionHorizonOptions & OfFit> = {
   ...lyapunovExponentOptions,
   error: required(positive, "Uncertainty of the first value, in its unit"),
   tolerance: required(positive, "Largest error of a value that is still of use, in the same unit"),
@@ -213,8 +226,9 @@ const estimate: Schema<NonNullable<AttractorOptions["estimate"]>> = {
   interval: required(pair, "Its interval"),
 };
 
-const attractorOptions: Schema<AttractorOptions> = {
+const attractorOptions: Schema<AttractorOptions & OfFit> = {
   parameters: held.parameters,
+  group,
   vary,
   values: required(
     either(listOf(anyNumber, "[2, 3, 4]"), shapeOf(ends, "{ from: 2.5, to: 4 }")),
@@ -255,7 +269,7 @@ const attractorSchema: FunctionSchema = {
   sizes: attractorSize,
 };
 
-const cobwebOptions: Schema<CobwebOptions> = {
+const cobwebOptions: Schema<CobwebOptions & OfFit> = {
   ...held,
   initial: required(valuesByName, "First value by state"),
   periods: optional(whole(1, 30, 1_000_000), "Periods shown", 30),
@@ -273,7 +287,7 @@ const known: Schema<NonNullable<BasinsOptions["known"]>> = {
   sd: required(positive, "Standard deviation of the first value"),
 };
 
-const basinsOptions: Schema<BasinsOptions> = {
+const basinsOptions: Schema<BasinsOptions & OfFit> = {
   ...held,
   range: required(pair, "Lowest and highest first value to look at"),
   count: optional(whole(1, 400, 1_000_000), "First values tried before borders are narrowed down", 400),

@@ -131,6 +131,15 @@ export function tooManyArgumentsError(schema: FunctionSchema, value: unknown): M
   );
 }
 
+/** @param of - what the option goes with. */
+export function otherSubjectError(option: string, of: "rule" | "fit"): ModelError {
+  const why =
+    of === "rule"
+      ? "goes with a rule, and a fit was given, which brings its own. Leave it out, or give `fit.rule`"
+      : "goes with a fit, and a rule was given. Leave it out";
+  return new ModelError("option-conflict", `Option ${inCode(option)} ${why}.`, { option, of });
+}
+
 const gigabyte = 1e9;
 
 /** @param most - largest value that fits. */

@@ -45,6 +45,8 @@ export interface Field extends Described {
   readonly need: "required" | "optional";
   /** One sentence for the analyst; the same text stands above the field of the type. */
   readonly says: string;
+  /** The only first argument it goes with. */
+  readonly of?: "rule" | "fit";
 }
 
 /** A field whose values have a type. */
@@ -96,6 +98,15 @@ export function optional<T>(
     says: byDefault === undefined ? `${says}.` : `${says}; default ${byDefault}.`,
   };
 }
+
+/** An option that goes with one kind of first argument only. */
+export const only = <T, Need extends Field["need"]>(
+  of: "rule" | "fit",
+  option: Option<T, Need>,
+): Option<T, Need> => ({
+  ...option,
+  of,
+});
 
 export const number = (range: Range, example: number | string): Value<number> => ({
   kind: { is: "number", ...range },
