@@ -7,23 +7,32 @@ import { emptyFigure } from "./refusals.js";
 
 /** An axis: what it measures and in what unit. */
 export interface Axis {
+  /** What the axis measures. */
   readonly title: string;
-  /** "" or absent = none. */
+  /** Its unit; default "" (none). */
   readonly unit?: string;
-  /** Default "linear"; "category" for names, "date" for calendar dates as ISO text. */
+  /**
+   * How places lie along it: "category" for names, "date" for calendar dates as ISO text; default "linear".
+   */
   readonly scale?: "linear" | "log" | "category" | "date";
-  /** Ends of the axis, in its unit; default: what the layers need. */
+  /** Ends of the axis, in its unit; default what the layers need. */
   readonly ends?: readonly [number, number];
-  /** Without ticks and grid: where places along the axis have no meaning of their own. */
+  /**
+   * Whether it has no ticks and grid: where places along the axis have no meaning of their own; default
+   * false.
+   */
   readonly bare?: boolean;
 }
 
 /** One set of axes with what is drawn on it, in drawing order. */
 export interface Panel {
-  /** "" for the only panel of a figure. */
+  /** Title of the panel; "" for the only one of a figure. */
   readonly title: string;
+  /** Horizontal axis. */
   readonly x: Axis;
+  /** Vertical axis. */
   readonly y: Axis;
+  /** What is drawn, in drawing order. */
   readonly layers: readonly Layer[];
 }
 
@@ -41,13 +50,21 @@ export interface Figure {
 
 /** What `figure` takes: one panel's axes and layers, or several panels. */
 export interface FigureOptions {
+  /** Title of the figure. */
   readonly title: string;
+  /** Horizontal axis of the only panel. */
   readonly x?: Axis;
+  /** Vertical axis of the only panel. */
   readonly y?: Axis;
+  /** What is drawn on the only panel, in drawing order. */
   readonly layers?: readonly Layer[];
+  /** Several panels, in place of `x`, `y` and `layers`. */
   readonly panels?: readonly Panel[];
+  /** One or two sentences that say in words what the figure shows. */
   readonly summary?: string;
+  /** What stands below the figure. */
   readonly notes?: readonly string[];
+  /** Tables shown as the numbers behind the figure; default what is drawn. */
   readonly numbers?: readonly Table[];
 }
 

@@ -10,11 +10,13 @@ import { shownTogether } from "./shown-together.js";
 
 /** What a case begins with. */
 export interface CaseOptions {
+  /** Title of the case. */
   readonly title: string;
-  /** In the client's words. */
+  /** The question, in the client's words. */
   readonly question: string;
+  /** Field of the case, which decides the caution that is printed. */
   readonly domain: Domain;
-  /** Seed of every draw in the notebook; without it 1, which is shown. */
+  /** Seed of every random number in the notebook, a whole number; it is shown; default 1. */
   readonly seed?: number;
   /** Date of the case, printed as given. */
   readonly date?: string;

@@ -69,11 +69,11 @@ const leastSquaresProblem: Schema<LeastSquaresProblem> = {
   jacobian: optional(
     func<Residuals>("() => y.map(() => -1)"),
     "Derivative of every residual by every parameter, row-major [rows, size]",
-    "by differences",
+    "central differences",
   ),
   start: required(numbers("[1]", 1), "Values of the parameters where the search begins"),
-  lower: optional(numbers("[0]"), "Lowest admitted values", "open"),
-  upper: optional(numbers("[10]"), "Highest admitted values", "open"),
+  lower: optional(numbers("[0]"), "Lowest admitted values", "no limit"),
+  upper: optional(numbers("[10]"), "Highest admitted values", "no limit"),
   scale: optional(
     numbers("[1]"),
     "Typical size of each parameter, for difference steps about 0",

@@ -22,8 +22,7 @@ import { isPlain } from "./written.js";
 export function checkCall(name: string, all: ArrayLike<unknown>): void {
   const schema = functions.get(name)!;
   const given = withoutMapArguments(Array.from(all));
-  for (const [place, argument] of schema.takes.entries())
-    checkArgument(schema, argument, place, given[place]);
+  for (const [place, argument] of schema.takes.entries()) checkArgument(schema, argument, place, given);
   const count = schema.takes.length + (schema.options === undefined ? 0 : 1);
   if (given.length > count) throw tooManyArgumentsError(schema, given[count]);
   if (schema.options !== undefined) checkOptions(schema, given);
@@ -36,11 +35,17 @@ function withoutMapArguments(given: readonly unknown[]): readonly unknown[] {
   return mapped ? [value] : given;
 }
 
-function checkArgument(schema: FunctionSchema, argument: Argument, place: number, value: unknown): void {
+function checkArgument(
+  schema: FunctionSchema,
+  argument: Argument,
+  place: number,
+  given: readonly unknown[],
+): void {
+  const value = given[place];
   if (value === undefined && argument.mayBeLeftOut === true) return;
   const { name, takes } = argument;
   if (!("kind" in takes)) {
-    if (!takes.some((kind) => isOf(kind, value))) throw argumentError(schema, place, takes, value);
+    if (!takes.some((kind) => isOf(kind, value))) throw argumentError(schema, place, takes, given);
   } else if (faultOf(takes, value, []) !== undefined) throw plainArgumentError(schema, name, takes, value);
 }
 

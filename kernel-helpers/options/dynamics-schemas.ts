@@ -186,8 +186,8 @@ const longest = 1e9;
 const lyapunovExponentOptions: Schema<LyapunovExponentOptions & OfFit> = {
   ...held,
   initial,
-  periods: optional(whole(300, 100_000, longest), "Periods measured, at least 300", 100_000),
-  discard: optional(whole(0, 1000, longest), "Periods left out at the beginning", 1000),
+  periods: optional(whole(300, 100_000, longest), "Periods measured, at least 300", "100,000"),
+  discard: optional(whole(0, 1000, longest), "Periods left out at the beginning", "1,000"),
   level: intervalLevel,
   onProgress,
   signal,
@@ -291,7 +291,7 @@ const basinsOptions: Schema<BasinsOptions & OfFit> = {
   ...held,
   range: required(pair, "Lowest and highest first value to look at"),
   count: optional(whole(1, 400, 1_000_000), "First values tried before borders are narrowed down", 400),
-  periods: optional(whole(1, 3000, longest), "Periods until a path is taken to have arrived", 3000),
+  periods: optional(whole(1, 3000, longest), "Periods until a path is taken to have arrived", "3,000"),
   known: optional(
     shapeOf(known, "{ mean: 20, sd: 4 }"),
     "What is known of the first value: normal with this mean and standard deviation",

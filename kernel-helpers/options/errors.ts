@@ -1,6 +1,6 @@
 import { ModelError } from "../../src/numeric/index.js";
 import { list } from "../wording/index.js";
-import { type ArgumentKind, adviceFor, argumentWords } from "./argument.js";
+import { type ArgumentKind, adviceFor, argumentWords, isOf } from "./argument.js";
 import { faultOf } from "./check-value.js";
 import type { Fault, Path } from "./fault.js";
 import type { FunctionSchema } from "./function-schema.js";
@@ -85,15 +85,16 @@ export function argumentError(
   schema: FunctionSchema,
   place: number,
   wanted: readonly ArgumentKind[],
-  value: unknown,
+  all: readonly unknown[],
 ): ModelError {
+  const value = all[place];
+  const isElsewhere = all.some((each) => wanted.some((kind) => isOf(kind, each)));
+  const advice = isElsewhere ? "Give the arguments in this order" : adviceFor(wanted, value);
   const which = schema.takes.length > 1 ? ` as its ${ordinals[place]} argument` : "";
+  const words = wanted.map((kind) => argumentWords[kind]);
   return new ModelError(
     "argument-wrong",
-    `${inCode(schema.name)} needs ${list(
-      wanted.map((kind) => argumentWords[kind]),
-      "or",
-    )}${which}; ${given(value)} was given. ${adviceFor(wanted, value)}: ${inCode(schema.example)}.`,
+    `${inCode(schema.name)} needs ${list(words, "or")}${which}, not ${given(value)}. ${advice}: ${inCode(schema.example)}.`,
     { argument: schema.takes[place]?.name, place: place + 1 },
   );
 }
@@ -175,10 +176,11 @@ function write(options: Given, path: Path, instead: unknown): string {
 
 /** The same with a field under the name that was meant. */
 function writeRenamed(options: Given, path: Path, name: string, meantName: string, known: Fields): string {
-  const { [name]: value, ...others } = path.reduce<unknown>(
+  const { [name]: value, ...rest } = path.reduce<unknown>(
     (own, step) => (own as Given)[step],
     options,
   ) as Given;
+  const others = Object.fromEntries(Object.entries(rest).filter(([each]) => Object.hasOwn(known, each)));
   const own = translated(name, value, known[meantName]!);
   return path.length === 0
     ? write({}, [meantName], own)

@@ -190,7 +190,7 @@ const differencesSchema: FunctionSchema = {
 const format = optional(
   oneOf<Format>("csv", "tsv", "json", "parquet", "excel", "duckdb"),
   "What the file holds",
-  "by the ending of its name",
+  "what the ending of its name says",
 );
 
 const readOptions: Schema<ReadOptions> = {

@@ -52,7 +52,7 @@ const column: Schema<Column> = {
   digits: optional(
     whole(0, 4, 100),
     "Significant digits of a number, or decimals of a percentage or probability",
-    "by the kind",
+    "as the kind has it",
   ),
   grouped: optional(flag, "Whether digits are set apart in thousands; false for a year", "true"),
   pairedWith: optional(

@@ -46,7 +46,8 @@ export function mustBe(kind: Kind): string {
 
 function listWords({ of, length, least = 0 }: Extract<Kind, { is: "list" }>): string {
   const each = mustBe(of.kind);
-  if (length !== undefined) return `a list of ${length}, each ${each}`;
+  if (length !== undefined)
+    return of.kind.is === "number" ? "two numbers in a list" : `a list of ${length}, each ${each}`;
   return `a list${least > 0 ? " with" : " of"} ${least > 0 ? `at least ${least}, each ` : ""}${each}`;
 }
 

@@ -4,13 +4,15 @@ import { refuseNoDensity } from "./refusals.js";
 
 /** Options of `densityDependence`. */
 export interface DensityOptions extends RunHooks {
-  /** Default: the only state. */
+  /** Name of the state; default the only one. */
   readonly state?: string;
   /** Records drawn without density dependence; default 1999. */
   readonly resamples?: number;
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
-  /** Confidence above which density dependence is called; default 0.95, a test at 5%. */
+  /**
+   * Confidence above which density dependence is called, between 0 and 1; 0.95 is a test at 5%; default 0.95.
+   */
   readonly level?: number;
 }
 

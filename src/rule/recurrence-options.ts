@@ -2,11 +2,13 @@ import type { ProcessNoise } from "./rule.js";
 
 /** What can be said of a rule beside its text. */
 export interface RecurrenceOptions {
-  /** What the rule is called in titles, tables and sentences; default: its text, or its name in the catalogue. */
+  /**
+   * What the rule is called in titles, tables and sentences; default its text, or its name in the catalogue.
+   */
   readonly name?: string;
-  /** The only names that are parameters; any other free name is then refused. Default: every free name is one. */
+  /** The only names that are parameters; any other free name is then refused; default every free name. */
   readonly parameters?: readonly string[];
-  /** Names that are recorded by period: columns of the record. Only they may be read at [t+1]. */
+  /** Names that are recorded by period, columns of the record; only they may be read at [t+1]. */
   readonly inputs?: readonly string[];
   /** Unit by name. */
   readonly units?: Readonly<Record<string, string>>;
@@ -14,7 +16,7 @@ export interface RecurrenceOptions {
   readonly bounds?: Readonly<Record<string, readonly [number, number]>>;
   /** Where a fit starts, by parameter. */
   readonly start?: Readonly<Record<string, number>>;
-  /** Parameters that no fit changes. */
+  /** Parameters that no fit changes, by name. */
   readonly fixed?: Readonly<Record<string, number>>;
   /** By state: its first value, its first values oldest first where the rule reads past ones, or "estimated". */
   readonly initial?: Readonly<Record<string, number | readonly number[] | "estimated">>;

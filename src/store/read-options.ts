@@ -3,7 +3,7 @@ export type Format = "csv" | "tsv" | "json" | "parquet" | "excel" | "duckdb";
 
 /** How to read a file where it cannot say so itself. */
 export interface ReadOptions {
-  /** Default: by the ending of the file's name. */
+  /** What the file holds; default what the ending of its name says. */
   readonly format?: Format;
   /** What separates the cells of a text file: ",", ";", a tab or "|"; found where the file shows it. */
   readonly delimiter?: string;
@@ -11,7 +11,7 @@ export interface ReadOptions {
   readonly decimal?: "." | ",";
   /** Order of dates written with numbers, or "text" to leave them as they are. */
   readonly dates?: "day-month-year" | "month-day-year" | "text";
-  /** Texts that mark a missing value: `["n.d.", "NA"]`. An empty cell always does. */
+  /** Texts that mark a missing value: `["n.d.", "NA"]`; an empty cell always does. */
   readonly missing?: readonly string[];
   /** Encoding of a text file, such as "windows-1252"; default UTF-8, or what its byte-order mark says. */
   readonly encoding?: string;

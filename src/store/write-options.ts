@@ -3,7 +3,7 @@ import type { Format } from "./read-options.js";
 
 /** How to write a file. */
 export interface WriteOptions {
-  /** Default: by the ending of the file's name. */
+  /** What the file holds; default what the ending of its name says. */
   readonly format?: Format;
   /** What separates the cells of a text file; default "," (a tab for .tsv). */
   readonly delimiter?: string;

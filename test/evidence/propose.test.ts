@@ -37,7 +37,10 @@ describe("propose", () => {
     const found = truths.flatMap(([name, rule, parameters, first]) =>
       Array.from({ length: 8 }, (_, k) => {
         const errors = k % 2 === 0 ? "process" : "observation";
-        const { verdict } = propose(series(drawn(rule, parameters, first, 30, 0.1, errors, stream)), proportional);
+        const { verdict } = propose(
+          series(drawn(rule, parameters, first, 30, 0.1, errors, stream)),
+          proportional,
+        );
         return verdict.rules.includes(name);
       }),
     );

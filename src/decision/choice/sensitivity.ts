@@ -16,6 +16,7 @@ import { opened, percent, plain } from "../words/amount.js";
 
 /** Options of `sensitivity`. */
 export interface SensitivityOptions extends StandingOptions {
+  /** Measure whose change is wanted. */
   readonly answer: Measure;
   /** Parameters, first values and inputs to move; default what the fit estimates, or all parameters of a rule. */
   readonly vary?: readonly string[];

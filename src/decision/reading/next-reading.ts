@@ -17,21 +17,33 @@ import { separationAt } from "./separation.js";
 export interface NextReadingOptions extends RunHooks {
   /** Periods beyond the record up to which a reading could be taken, and up to which the answer looks. */
   readonly periods: number;
-  /** Times at which it could be taken, in the unit of the period column; default every period from the first on. */
-  readonly values?: readonly number[] | { readonly from: number; readonly to: number };
-  /** The answer whose margin is to be narrowed; needed for a single fit. */
+  /**
+   * Times at which it could be taken, in the unit of the period column: a list, or two ends; default every
+   * period from the first on.
+   */
+  readonly values?:
+    | readonly number[]
+    | {
+        /** First value. */
+        readonly from: number;
+        /** Last value. */
+        readonly to: number;
+      };
+  /** Measure whose margin is to be narrowed; needed for a single fit. */
   readonly answer?: Measure;
   /** What is read; default the first state. */
   readonly state?: string;
-  /** Readings taken at the same time; default 1. They count where the error is one of reading. */
+  /** Readings taken at the same time; they count where the error is one of observation; default 1. */
   readonly replicates?: number;
-  /** Cost of a reading at a time, in any unit; the gain is then weighed by it. Default the same everywhere. */
+  /**
+   * Cost of a reading at a time, in any unit; the gain is then weighed by it; default the same everywhere.
+   */
   readonly cost?: (time: number) => number;
-  /** Of fits with several groups: which one. */
+  /** Of a fit or a record with several groups: which one. */
   readonly group?: string;
-  /** Drawn parameters; default 1000. */
+  /** Parameter values drawn; default 1000. */
   readonly paths?: number;
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
 }
 

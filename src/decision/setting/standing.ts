@@ -28,18 +28,19 @@ import { refuseGroup } from "../refusals.js";
 export interface StandingOptions extends StartOptions, RunHooks {
   /** Whole periods ahead. */
   readonly periods: number;
-  /** By input: its plan. For a fit the first period ahead comes first, for a rule period 0. */
+  /** By input: its plan; for a fit the first period ahead comes first, for a rule period 0. */
   readonly inputs?: InputPlans;
   /** Of a fit or a record with several groups: which one. */
   readonly group?: string;
-  /** Of a rule: its parameters and first values. */
+  /** Of a rule: its parameters by name. */
   readonly parameters?: Readonly<Record<string, number>>;
+  /** Of a rule: its first values by state. */
   readonly initial?: InitialValues;
   /** Of a rule: random change by state, for probabilities. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** Paths for probabilities and margins; default 2000. */
+  /** Random paths for probabilities and margins; default 2000. */
   readonly paths?: number;
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
 }
 

@@ -5,20 +5,32 @@ import { type HeldSetting, holdStep } from "../setting/held-step.js";
 import { initialVector } from "../setting/setting.js";
 
 export interface AttractorOptions extends Omit<HeldSetting, "inputs">, RunHooks {
-  /** The parameter that is varied. */
+  /** Parameter that is varied. */
   readonly vary: string;
   /** Values of the parameter: a list, or two ends with how many. */
   readonly values:
     | readonly number[]
-    | { readonly from: number; readonly to: number; readonly count?: number };
+    | {
+        /** First value. */
+        readonly from: number;
+        /** Last value. */
+        readonly to: number;
+        /** How many values, ends included; default 600. */
+        readonly count?: number;
+      };
   /** Periods kept at each value; default 300. */
   readonly periods?: number;
   /** Periods left out before; default 500. */
   readonly discard?: number;
   /** First values of the one state to start from: several show attractors that exist side by side. */
   readonly initial: number | readonly number[];
-  /** What a fit says of the parameter, to be marked. */
-  readonly estimate?: { readonly value: number; readonly interval: readonly [number, number] };
+  /** What a fit says of the parameter, to be marked; default the estimate of the fit given. */
+  readonly estimate?: {
+    /** Estimate of the parameter. */
+    readonly value: number;
+    /** Its interval. */
+    readonly interval: readonly [number, number];
+  };
 }
 
 /** Where a rule goes in the long run, against one of its parameters. */

@@ -5,14 +5,19 @@ import { oneStateOnly, unreadableOption } from "../refusals.js";
 import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.js";
 
 export interface BasinsOptions extends HeldSetting, RunHooks {
-  /** First values to look at. */
+  /** Lowest and highest first value to look at. */
   readonly range: Interval;
-  /** Starts tried before borders are narrowed down; default 400. */
+  /** First values tried before borders are narrowed down; default 400. */
   readonly count?: number;
-  /** Periods until a start is taken to have arrived; default 3,000. */
+  /** Periods until a path is taken to have arrived; default 3,000. */
   readonly periods?: number;
   /** What is known of the first value: normal with this mean and standard deviation. */
-  readonly known?: { readonly mean: number; readonly sd: number };
+  readonly known?: {
+    /** Mean of the first value. */
+    readonly mean: number;
+    /** Standard deviation of the first value. */
+    readonly sd: number;
+  };
 }
 
 /** Where starts end up. */

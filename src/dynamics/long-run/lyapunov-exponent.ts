@@ -5,12 +5,16 @@ import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.
 import { type InitialValues, initialVector } from "../setting/setting.js";
 
 export interface LyapunovExponentOptions extends HeldSetting, RunHooks {
+  /**
+   * First values by state, with lags a list, oldest first; those that the rule states or the fit estimates
+   * may be left out.
+   */
   readonly initial?: InitialValues;
-  /** Periods measured; default 100,000. */
+  /** Periods measured, at least 300; default 100,000. */
   readonly periods?: number;
   /** Periods left out at the beginning; default 1,000. */
   readonly discard?: number;
-  /** Default 0.95. */
+  /** Confidence level of the interval, between 0 and 1; default 0.95. */
   readonly level?: number;
 }
 

@@ -8,7 +8,7 @@ import {
   ticker,
 } from "../../numeric/index.js";
 import type { Fit } from "../fit.js";
-import { refuseFewDraws, refuseUnknownName } from "../refusals.js";
+import { groupError, refuseFewDraws, refuseUnknownName } from "../refusals.js";
 import { type RefitProblem, refitProblem } from "../resampling/refit-problem.js";
 import { normalErrors, recordMaker } from "../resampling/simulate-record.js";
 import type { GroupFit } from "../result/group-fit.js";
@@ -18,13 +18,13 @@ import type { Interval } from "./interval.js";
 
 /** Options of `gridInterval`. */
 export interface GridIntervalOptions extends RunHooks {
-  /** Group of the fit; default its first. */
+  /** Group of the fit; default its only one. */
   readonly group?: string;
   /** Simulated records at every value tried; default 399. */
   readonly resamples?: number;
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
-  /** Default that of the fit. */
+  /** Confidence level of the interval, between 0 and 1; default that of the fit. */
   readonly level?: number;
 }
 
@@ -45,7 +45,7 @@ const halvings = 10;
 export function gridInterval(fit: Fit, name: string, options: GridIntervalOptions = {}): Interval {
   const { resamples: draws = 399, seed = 1, level = fit.options.level ?? 0.95 } = options;
   if (!(Number.isInteger(draws) && draws >= 20)) throw refuseFewDraws(draws);
-  const fitted = fit.groups.find((each) => each.group === (options.group ?? fit.groups[0]!.group))!;
+  const fitted = groupNamed(fit, options.group);
   const i = fitted.estimates.findIndex((each) => each.name === name);
   if (i < 0)
     throw refuseUnknownName(
@@ -60,6 +60,18 @@ export function gridInterval(fit: Fit, name: string, options: GridIntervalOption
   const lower = limit(fitted.estimates[i]!.value, -reach, (value) => 1 - ordinary(value) >= tail);
   const upper = limit(fitted.estimates[i]!.value, reach, (value) => ordinary(value) >= tail);
   return { kind: "grid", level, lower, upper, note: `${draws} simulated records a value, seed ${seed}` };
+}
+
+function groupNamed({ groups }: Fit, name: string | undefined): GroupFit {
+  const found = groups.find(
+    ({ group }) => group === (name ?? (groups.length === 1 ? groups[0]!.group : undefined)),
+  );
+  if (found === undefined)
+    throw groupError(
+      name,
+      groups.map(({ group }) => group),
+    );
+  return found;
 }
 
 /** Share of records simulated with unknown i at a value whose signed root lies at or below the fit's own. */

@@ -14,15 +14,18 @@ import { type ResampledErrors, type Resampler, resampler } from "./resampler.js"
 
 /** Options of `bootstrap`. */
 export interface BootstrapOptions extends RunHooks {
-  /** Normal errors (`parametric`, default), the fit's own residuals one by one, or in runs of neighbours (`block`). */
+  /**
+   * Errors of the simulated records: normal, the fit's own residuals one by one, or in blocks of neighbours;
+   * default "parametric".
+   */
   readonly errors?: ResampledErrors;
-  /** Length of a run; default the cube root of the number of values, rounded up. */
+  /** Length of a block; default the cube root of the number of values, rounded up. */
   readonly block?: number;
   /** Refits a group; default 999. */
   readonly resamples?: number;
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
-  /** Default that of the fit. */
+  /** Confidence level of the intervals, between 0 and 1; default that of the fit. */
   readonly level?: number;
 }
 

@@ -7,11 +7,13 @@ import { type GroupChangePoint, groupChangePoint } from "./group-change-point.js
 
 /** Options of `changePoint`; those of a fit but for the kind of error, which is the process. */
 export interface ChangePointOptions extends Omit<FitOptions, "errors" | "intervals">, RunHooks {
-  /** Least share of the record on either side of a break; default 0.15. */
+  /** Least share of the record on either side of a break, between 0 and 0.5; default 0.15. */
   readonly leastShare?: number;
-  /** Records without a break that the largest F is held against; default 399, with which 5% is met exactly. */
+  /**
+   * Records without a break that the largest F is held against; with 399 a test at 5% is exact; default 399.
+   */
   readonly resamples?: number;
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
 }
 

@@ -11,9 +11,9 @@ import { type Window, windows } from "./windows.js";
 
 /** Options of `check`. */
 export interface CheckOptions extends RunHooks {
-  /** Records drawn from the fit and refitted; default 200, the least before an interval is quoted. */
+  /** Records drawn from the fit and refitted, at least 50; default 200. */
   readonly resamples?: number;
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
 }
 

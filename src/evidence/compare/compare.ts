@@ -14,7 +14,7 @@ export interface CompareOptions extends RunHooks {
   readonly origins?: number;
   /** Periods forecast from each; default a tenth of the record. */
   readonly periods?: number;
-  /** Level of the forecasts' intervals; default 0.8. */
+  /** Confidence level of the forecasts' intervals, between 0 and 1; default 0.8. */
   readonly level?: number;
   /** What the client would be told by a fit; where rivals are not told apart, what each says is set side by side. */
   readonly decide?: (fit: Fit) => string;

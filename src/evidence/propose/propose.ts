@@ -16,11 +16,11 @@ import { type Tried, tryRules } from "./try-rules.js";
 
 /** Options of `propose`; others are those of a fit. */
 export interface ProposeOptions extends Omit<FitOptions, "errors" | "intervals">, RunHooks {
-  /** Default: the only state. */
+  /** Name of the state; default the only one. */
   readonly state?: string;
   /** Where the error lies; without it both are tried, and the record says which, or that it cannot. */
   readonly errors?: "process" | "observation";
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
 }
 

@@ -1,7 +1,17 @@
 /** A level that a state is to get to: from below (`risesTo`) or from above (`fallsTo`), in the state's unit. */
 export type CrossedLevel =
-  | { readonly risesTo: number; readonly fallsTo?: never }
-  | { readonly fallsTo: number; readonly risesTo?: never };
+  | {
+      /** Level that the state rises to, from below, in its unit. */
+      readonly risesTo: number;
+      /** Level that the state falls to, from above, in its unit. */
+      readonly fallsTo?: never;
+    }
+  | {
+      /** Level that the state falls to, from above, in its unit. */
+      readonly fallsTo: number;
+      /** Level that the state rises to, from below, in its unit. */
+      readonly risesTo?: never;
+    };
 
 /** A level with the side from which it is reached: 1 where values rise to it, -1 where they fall to it. */
 export interface LevelSide {

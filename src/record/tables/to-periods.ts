@@ -10,8 +10,9 @@ import { type Summary, summaryOf } from "./summary-of.js";
 
 /** Which longer period to count by, and how each column is taken over it. */
 export interface ToPeriodsOptions extends PeriodsOf {
+  /** Length of the longer periods, or their calendar. */
   readonly to: StepLength | CalendarName;
-  /** A flow adds up ("sum"); a level at an instant is its "last" one. */
+  /** What is taken of each column: a flow adds up ("sum"), a level at an instant is its "last" one. */
   readonly take: Readonly<Record<string, Summary>>;
 }
 

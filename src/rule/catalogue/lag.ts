@@ -1,5 +1,6 @@
 /** Delay in whole periods. */
 export interface LagOption {
+  /** Delay in whole periods. */
   readonly lag: number;
 }
 

@@ -48,8 +48,9 @@ function ages(count: number): CatalogueEntry {
 
 /** Names of stages, and which moves between them may happen; a share not listed is zero. */
 export interface StageOption {
+  /** Names of the stages. */
   readonly stages: readonly string[];
-  /** Pairs [from, to]; default every pair. */
+  /** Moves that may happen, as pairs [from, to]; default every pair. */
   readonly moves?: readonly (readonly [from: string, to: string])[];
 }
 
@@ -83,7 +84,9 @@ function stages({ stages: names, moves }: StageOption): CatalogueEntry {
 
 /** How long goods last, and which are given out first. */
 export interface PerishableOption {
+  /** Periods that goods last. */
   readonly life: number;
+  /** Which goods are given out first; default "oldest-first". */
   readonly issue?: "oldest-first" | "newest-first";
 }
 
@@ -124,8 +127,14 @@ function perishable(life: number, issue: "oldest-first" | "newest-first"): Catal
   };
 }
 
+/** How finely ages are told apart. */
+export interface AgesOption {
+  /** Number of age classes. */
+  readonly ages: number;
+}
+
 /** n1' = f1 n1 + f2 n2 + ..., n2' = s1 n1, ... */
-export const agesRule = ({ ages: count, ...options }: NamedRuleOptions & { readonly ages: number }): Rule =>
+export const agesRule = ({ ages: count, ...options }: NamedRuleOptions & AgesOption): Rule =>
   catalogueRule(ages(count), options);
 /** v' = P v, one share p_from_to a move. */
 export const stagesRule = ({ stages: names, moves, ...options }: NamedRuleOptions & StageOption): Rule =>
