@@ -36,8 +36,12 @@ export function isOf(kind: ArgumentKind, value: unknown): boolean {
   }
 }
 
+/** Results that are no rows of a record. */
+const results: readonly unknown[] = ["fit", "rule", "observations", "forecast", "simulation"];
+
 function isRecord(value: unknown): boolean {
-  if (isFrame(value) || Array.isArray(value) || kindOf(value) === "observations") return true;
+  if (isFrame(value) || kindOf(value) === "observations") return true;
+  if (Array.isArray(value)) return !results.includes(kindOf(value[0]));
   return isPlain(value) && typeof kindOf(value) !== "string" && !isPromise(value);
 }
 

@@ -11,6 +11,7 @@ import {
 } from "./errors.js";
 import type { Argument, FunctionSchema, Size } from "./function-schema.js";
 import { functions } from "./functions.js";
+import { namesOf } from "./rule-names.js";
 import { isPlain } from "./written.js";
 
 /**
@@ -55,11 +56,11 @@ function checkOptions(schema: FunctionSchema, given: readonly unknown[]): void {
   if (value !== undefined && instead !== undefined && faultOf(instead, value, []) === undefined) return;
   if (value !== undefined && !isPlain(value)) throw noOptionsError(schema, value);
   const options = value ?? {};
-  const fault = shapeFault(shape!, options, []);
-  if (fault !== undefined) throw optionError(fault, schema, options);
   const subject = (given[0] as { kind?: unknown } | undefined)?.kind;
   for (const [name, { of }] of Object.entries(shape!.fields))
     if (of !== undefined && of !== subject && options[name] !== undefined) throw otherSubjectError(name, of);
+  const fault = shapeFault(shape!, options, [], namesOf(given[0], options));
+  if (fault !== undefined) throw optionError(fault, schema, options);
   for (const size of sizes) checkSize(size, options, given);
 }
 

@@ -1,6 +1,7 @@
 import type { Fault, Path } from "./fault.js";
 import type { Described, Field, Fields, Kind, Range, Shape } from "./option.js";
 import { nearestChoice } from "./other-words.js";
+import type { Names, Role } from "./rule-names.js";
 import { mustBe } from "./words-of-kind.js";
 import { code, isNumbers, isPlain } from "./written.js";
 
@@ -10,6 +11,7 @@ type KindOf<Is extends Kind["is"]> = Extract<Kind, { is: Is }>;
 interface AnyCase extends Described {
   readonly value: unknown;
   readonly path: Path;
+  readonly names: Names;
 }
 
 interface Case<Is extends Kind["is"]> extends AnyCase {
@@ -17,24 +19,34 @@ interface Case<Is extends Kind["is"]> extends AnyCase {
 }
 
 /** The first thing that is wrong with a value; undefined where nothing is. */
-export function faultOf({ kind, example }: Described, value: unknown, path: Path): Fault | undefined {
-  const one: AnyCase = { kind, example, value, path };
+export function faultOf(
+  { kind, example }: Described,
+  value: unknown,
+  path: Path = [],
+  names: Names = () => undefined,
+): Fault | undefined {
+  const one: AnyCase = { kind, example, value, path, names };
   if (!accepts(kind, value)) return wrong(one, meantNumber(kind, value) ?? code(example));
   const check = checks[kind.is] as ((one: AnyCase) => Fault | undefined) | undefined;
   return check?.(one);
 }
 
 /** The first thing that is wrong with an object of options. */
-export function shapeFault({ fields, oneOf = [] }: Shape, value: object, path: Path): Fault | undefined {
+export function shapeFault(
+  { fields, oneOf = [] }: Shape,
+  value: object,
+  path: Path,
+  names: Names,
+): Fault | undefined {
   const given = Object.entries(value).filter(([, own]) => own !== undefined);
   const stranger = given.find(([name]) => !Object.hasOwn(fields, name));
   if (stranger !== undefined)
     return { kind: "unknown", path, name: stranger[0], value: stranger[1], known: fields };
-  const names = given.map(([name]) => name);
+  const present = given.map(([name]) => name);
   return (
-    first(oneOf, (group) => oneOfFault(group, names, fields, path)) ??
-    first(given, ([name, own]) => faultOf(fields[name]!, own, [...path, name])) ??
-    missingFault(fields, names, path)
+    first(oneOf, (group) => oneOfFault(group, present, fields, path)) ??
+    first(given, ([name, own]) => faultOf(fields[name]!, own, [...path, name], names)) ??
+    missingFault(fields, present, path)
   );
 }
 
@@ -73,6 +85,19 @@ const wrong = ({ kind, value, path }: AnyCase, instead: unknown): Fault => ({
   value,
   instead,
 });
+
+/** A name that the rule of the call does not have. */
+function strangerFault(
+  { names }: AnyCase,
+  role: Role,
+  given: readonly string[],
+  path: Path,
+  isKey: boolean,
+): Fault | undefined {
+  const known = names(role);
+  const name = given.find((each) => known !== undefined && !known.includes(each));
+  return name === undefined ? undefined : { kind: "stranger", path, name, role, known: known!, isKey };
+}
 
 /** "12" where the number 12 would do. */
 function meantNumber(kind: Kind, value: unknown): number | undefined {
@@ -127,27 +152,40 @@ const checks: { readonly [Is in Kind["is"]]?: (one: Case<Is>) => Fault | undefin
     const value = one.value as number;
     return isWithin(one.kind, value) ? undefined : wrong(one, nearNumber(one.kind, value, one.example));
   },
-  text: (one) =>
-    (one.value as string).trim() === "" && one.kind.words !== undefined
-      ? wrong(one, code(one.example))
-      : undefined,
+  text: (one) => {
+    const { kind, value, path } = one;
+    const name = value as string;
+    if (name.trim() === "" && kind.words !== undefined) return wrong(one, code(one.example));
+    return kind.names && strangerFault(one, kind.names, [name], path, false);
+  },
   choice: (one) => {
     const value = one.value as string;
     const { of } = one.kind;
     return of.includes(value) ? undefined : wrong(one, nearestChoice(value, of) ?? of[0]);
   },
   list: listFault,
-  named: ({ kind, value, path }) =>
-    first(Object.entries(value as object), ([name, own]) =>
-      own === undefined ? undefined : faultOf(kind.of, own, [...path, name]),
-    ),
-  shape: ({ kind, value, path }) => shapeFault(kind, value as object, path),
+  named: (one) => {
+    const { kind, value, path, names } = one;
+    const given = Object.entries(value as object).filter(([, own]) => own !== undefined);
+    return (
+      first(given, ([name, own]) => faultOf(kind.of, own, [...path, name], names)) ??
+      (kind.names &&
+        strangerFault(
+          one,
+          kind.names,
+          given.map(([name]) => name),
+          path,
+          true,
+        ))
+    );
+  },
+  shape: ({ kind, value, path, names }) => shapeFault(kind, value as object, path, names),
   variants: variantFault,
   measures: measureFault,
-  either: ({ kind, value, path }) => {
+  either: ({ kind, value, path, names }) => {
     const faults = kind.of
       .filter((each) => accepts(each.kind, value))
-      .map((each) => faultOf(each, value, path));
+      .map((each) => faultOf(each, value, path, names));
     if (faults.includes(undefined)) return undefined;
     // The one that was meant is the one of which most is right.
     return faults.reduce((best, next) => (next!.path.length > best!.path.length ? next : best));
@@ -155,38 +193,38 @@ const checks: { readonly [Is in Kind["is"]]?: (one: Case<Is>) => Fault | undefin
 };
 
 function listFault(one: Case<"list">): Fault | undefined {
-  const { kind, value, path } = one;
+  const { kind, value, path, names } = one;
   const list = value as ArrayLike<unknown>;
   const { length: wanted, least = 0 } = kind;
   if (list.length < least || (wanted !== undefined && list.length !== wanted))
     return wrong(one, code(one.example));
   // What is in a long list or a typed array is looked at where it is used.
   if (kind.of.kind.is === "anything" || isNumbers(value) || list.length > 10_000) return undefined;
-  return first([...Array.from(list).entries()], ([i, own]) => faultOf(kind.of, own, [...path, i]));
+  return first([...Array.from(list).entries()], ([i, own]) => faultOf(kind.of, own, [...path, i], names));
 }
 
-function variantFault({ kind: { by, of }, value, path }: Case<"variants">): Fault | undefined {
+function variantFault({ kind: { by, of }, value, path, names }: Case<"variants">): Fault | undefined {
   const given = value as Readonly<Record<string, unknown>>;
-  const names = Object.keys(of);
+  const choices = Object.keys(of);
   const chosen: Field = {
-    kind: { is: "choice", of: names },
-    example: JSON.stringify(names[0]),
+    kind: { is: "choice", of: choices },
+    example: JSON.stringify(choices[0]),
     need: "required",
     says: "",
   };
   const own = of[String(given[by])];
-  if (own !== undefined) return shapeFault({ fields: { [by]: chosen, ...own } }, given, path);
+  if (own !== undefined) return shapeFault({ fields: { [by]: chosen, ...own } }, given, path, names);
   const any = Object.values(of).flatMap((fields) => Object.entries(fields));
   const loose = any.map(([name, field]) => [name, { ...field, need: "optional" }] as const);
-  return shapeFault({ fields: { [by]: chosen, ...Object.fromEntries(loose) } }, given, path);
+  return shapeFault({ fields: { [by]: chosen, ...Object.fromEntries(loose) } }, given, path, names);
 }
 
-function measureFault({ kind: { of, also }, value, path }: Case<"measures">): Fault | undefined {
+function measureFault({ kind: { of, also }, value, path, names }: Case<"measures">): Fault | undefined {
   const kinds = Object.keys(of);
   const named = kinds.filter((name) => Object.hasOwn(value as object, name));
   const [only] = named;
   const shapes: readonly Shape[] = named.length === 1 ? [of[only!]!] : Object.values(of);
   const fields = Object.assign({}, ...shapes.map((shape) => shape.fields), also?.fields) as Fields;
   const oneOf = named.length === 1 ? (of[only!]!.oneOf ?? []) : [kinds];
-  return shapeFault({ fields, oneOf: [...oneOf, ...(also?.oneOf ?? [])] }, value as object, path);
+  return shapeFault({ fields, oneOf: [...oneOf, ...(also?.oneOf ?? [])] }, value as object, path, names);
 }

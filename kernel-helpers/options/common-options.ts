@@ -12,6 +12,7 @@ import {
   type Value,
   whole,
 } from "./option.js";
+import type { Role } from "./rule-names.js";
 
 export const rule: Argument = { name: "rule", takes: ["rule"] };
 export const fit: Argument = { name: "fit", takes: ["fit"] };
@@ -26,17 +27,16 @@ export const positive: Value<number> = number({ above: 0 }, 1);
 export const pair: Value<readonly [number, number]> = pairOf(number({}, 1), "[0, 100]");
 /** A pair of limits, either of which may be infinite. */
 export const limits: Value<readonly [number, number]> = pairOf(number({ open: true }, 1), "[0, Infinity]");
-export const valuesByName: Value<Readonly<Record<string, number>>> = named(number({}, 1), "{ r: 0.5 }");
-export const limitsByName: Value<Readonly<Record<string, readonly [number, number]>>> = named(
-  limits,
-  "{ r: [0, 3] }",
-);
+export const valuesByName = (names?: Role, example = "{ r: 0.5 }"): Value<Readonly<Record<string, number>>> =>
+  named(number({}, 1), example, names);
+export const limitsByName = (names?: Role): Value<Readonly<Record<string, readonly [number, number]>>> =>
+  named(limits, "{ r: [0, 3] }", names);
 /** A first value, or first values of a state with lags. */
 export const firstValue: Value<number | readonly number[]> = either(
   number({}, 10),
   listOf(number({}, 10), "[8, 10]"),
 );
-export const firstValues: Value<InitialValues> = named(firstValue, "{ N: 10 }");
+export const firstValues: Value<InitialValues> = named(firstValue, "{ N: 10 }", "state");
 
 export const seed: Option<number, "optional"> = optional(
   whole(0, 1, Number.MAX_SAFE_INTEGER),

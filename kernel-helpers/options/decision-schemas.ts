@@ -27,12 +27,12 @@ import {
   func,
   listOf,
   named,
+  nameOf,
   only,
   optional,
   required,
   type Schema,
   shapeOf,
-  text,
   whole,
 } from "./option.js";
 import { plans, startOptions } from "./plan-schemas.js";
@@ -50,7 +50,7 @@ const shared: Schema<Shared> = {
     plans,
     "By input: its plan; for a fit the first period ahead comes first, for a rule period 0",
   ),
-  parameters: only("rule", optional(valuesByName, "Of a rule: its parameters by name")),
+  parameters: only("rule", optional(valuesByName("parameter"), "Of a rule: its parameters by name")),
   initial: only("rule", optional(firstValues, "Of a rule: its first values by state")),
   noise: only("rule", optional(noise, "Of a rule: random change by state, for probabilities")),
   paths: optional(whole(1, 2000), "Random paths for probabilities and margins", 2000),
@@ -62,7 +62,7 @@ const shared: Schema<Shared> = {
 const sizes = [steppedPeriods, projectedPaths];
 
 const vary = required(
-  text("payment", "the name of a parameter, of a first value or of an input"),
+  nameOf("varied", "payment"),
   'What is varied: a parameter, a first value such as "N[0]", or an input, whose usual level is set',
 );
 
@@ -111,7 +111,7 @@ const sensitivityOptions: Schema<SensitivityOptions> = {
   ...shared,
   answer: required(measure, "Measure whose change is wanted"),
   vary: optional(
-    listOf(text("r", "the name of a parameter, of a first value or of an input"), '["r", "K"]'),
+    listOf(nameOf("varied", "r"), '["r", "K"]'),
     "Parameters, first values and inputs to move",
     "what the fit estimates, or all parameters of a rule",
   ),
@@ -158,7 +158,7 @@ const tradeoffSchema: FunctionSchema = {
 };
 
 const timeToReachOptions: Schema<TimeToReachOptions> = {
-  state: optional(text("N", "the name of a state"), "Name of the state", "the only one"),
+  state: optional(nameOf("state", "N"), "Name of the state", "the only one"),
   risesTo: optional(anyNumber, "Level that the state rises to, from below, in its unit"),
   fallsTo: optional(anyNumber, "Level that the state falls to, from above, in its unit"),
   level: intervalLevel,
@@ -190,7 +190,7 @@ const nextReadingOptions: Schema<NextReadingOptions> = {
     "every period from the first on",
   ),
   answer: optional(measure, "Measure whose margin is to be narrowed; needed for a single fit"),
-  state: optional(text("N", "the name of a state"), "What is read", "the first state"),
+  state: optional(nameOf("state", "N"), "What is read", "the first state"),
   replicates: optional(
     whole(1, 1, 1_000_000),
     "Readings taken at the same time; they count where the error is one of observation",

@@ -31,6 +31,7 @@ import {
   either,
   listOf,
   named,
+  nameOf,
   only,
   optional,
   required,
@@ -56,10 +57,10 @@ const group = only(
 
 const held: Schema<HeldSetting & OfFit> = {
   parameters: optional(
-    valuesByName,
+    valuesByName("parameter"),
     "Parameters by name; those that the rule holds fixed may be left out, and those of a fit are its estimates",
   ),
-  inputs: optional(valuesByName, "By input: the value at which it stays"),
+  inputs: optional(valuesByName("input"), "By input: the value at which it stays"),
   group,
 };
 
@@ -91,15 +92,15 @@ const exactly: Value<ExactValue> = either(
 
 const exactTrajectoryOptions: Schema<ExactTrajectoryOptions & OfFit> = {
   parameters: optional(
-    named(exactly, '{ r: "1/3" }'),
+    named(exactly, '{ r: "1/3" }', "parameter"),
     'Parameters by name: numbers, read as the decimals they print as, or texts such as "1/3"',
   ),
   initial: required(
-    named(either(exactly, listOf(exactly)), "{ N: 10 }"),
+    named(either(exactly, listOf(exactly)), "{ N: 10 }", "state"),
     "First values by state, or lists of them, oldest first, where the rule reads past values",
   ),
   inputs: optional(
-    named(listOf(exactly), "{ payment: [300, 300] }"),
+    named(listOf(exactly), "{ payment: [300, 300] }", "input"),
     "By input: its values by period, period 0 first",
   ),
   periods: required(whole(0, 12), "Whole periods to run"),
@@ -127,7 +128,7 @@ const closedFormSchema: FunctionSchema = {
   example: "closedForm(rule, { parameters: { a: 0.5, b: 1 }, initial: { x: 0 } })",
 };
 
-const searchRange: Value<SearchRange> = either(pair, named(pair, "{ N: [0, 100] }"));
+const searchRange: Value<SearchRange> = either(pair, named(pair, "{ N: [0, 100] }", "state"));
 
 const range = optional(
   searchRange,
@@ -161,14 +162,14 @@ const cyclesSchema: FunctionSchema = {
   example: "cycles(rule, { period: 2, parameters: { r: 3.2 } })",
 };
 
-const vary = required(text("r", "the name of a parameter"), "Parameter that is varied");
+const vary = required(nameOf("parameter", "r"), "Parameter that is varied");
 
 const bifurcationsOptions: Schema<BifurcationsOptions & OfFit> = {
   ...held,
   vary,
   range: required(pair, "Values that are followed, from the first to the second, up or down"),
   initial: required(
-    either(anyNumber, valuesByName),
+    either(anyNumber, valuesByName("state", "{ N: 10 }")),
     "First value from which the cycle to be followed is reached; for a system a value by state, near the equilibrium to be followed",
   ),
   limit: optional(whole(1, 8, 10_000), "At most so many bifurcations", 8),
@@ -271,7 +272,7 @@ const attractorSchema: FunctionSchema = {
 
 const cobwebOptions: Schema<CobwebOptions & OfFit> = {
   ...held,
-  initial: required(valuesByName, "First value by state"),
+  initial: required(valuesByName("state", "{ N: 10 }"), "First value by state"),
   periods: optional(whole(1, 30, 1_000_000), "Periods shown", 30),
 };
 

@@ -1,4 +1,4 @@
-import { ModelError } from "../../src/numeric/index.js";
+import { ModelError, nearestNames } from "../../src/numeric/index.js";
 import { list } from "../wording/index.js";
 import { type ArgumentKind, adviceFor, argumentWords, isOf } from "./argument.js";
 import { faultOf } from "./check-value.js";
@@ -6,8 +6,9 @@ import type { Fault, Path } from "./fault.js";
 import type { FunctionSchema } from "./function-schema.js";
 import type { Described, Fields } from "./option.js";
 import { meant, nearestChoice } from "./other-words.js";
+import { roleWords } from "./rule-names.js";
 import { inCode, mustBe } from "./words-of-kind.js";
-import { code, given, isPlain, typed } from "./written.js";
+import { code, codeOf, given, isPlain, typed } from "./written.js";
 
 type Given = Readonly<Record<string, unknown>>;
 
@@ -20,6 +21,8 @@ export function optionError(fault: Fault, { name }: FunctionSchema, options: Giv
       return unknownError(fault, name, options);
     case "missing":
       return missingError(fault, name, options);
+    case "stranger":
+      return strangerError(fault, options);
     case "both":
       return new ModelError(
         "option-conflict",
@@ -77,6 +80,29 @@ function missingError(
     "option-missing",
     `${needs}${must}.${write(options, [...path, name], code(field.example))}`,
     { options: names },
+  );
+}
+
+function strangerError(
+  { path, name, role, known, isKey }: Extract<Fault, { kind: "stranger" }>,
+  options: Given,
+): ModelError {
+  const near = nearestNames(name, known);
+  const right = near[0] ?? (known.length === 1 ? known[0] : undefined);
+  const has = known.length === 0 ? `It has no ${roleWords[role]} at all` : `It has ${list(known)}`;
+  const hint =
+    near.length === 0
+      ? ""
+      : ` Did you mean ${list(
+          near.map((each) => JSON.stringify(each)),
+          "or",
+        )}?`;
+  const change =
+    right === undefined ? "" : isKey ? writeKey(options, path, name, right) : write(options, path, right);
+  return new ModelError(
+    "unknown-name",
+    `Option ${inCode(placeOf(path))}: the rule has no ${roleWords[role]} ${JSON.stringify(name)}. ${has}.${hint}${change}`,
+    { option: placeOf(path), name, known },
   );
 }
 
@@ -170,16 +196,14 @@ function placeOf(path: Path): string {
 /** The whole option with the wrong part put right, as it is typed. */
 function write(options: Given, path: Path, instead: unknown): string {
   const [name] = path as [string];
-  const text = typed(withPart(options, path, instead)[name]);
+  const text =
+    typed(withPart(options, path, instead)[name]) ?? (path.length === 1 ? codeOf(instead) : undefined);
   return text === undefined ? "" : ` Write ${inCode(`${name}: ${text}`)}.`;
 }
 
 /** The same with a field under the name that was meant. */
 function writeRenamed(options: Given, path: Path, name: string, meantName: string, known: Fields): string {
-  const { [name]: value, ...rest } = path.reduce<unknown>(
-    (own, step) => (own as Given)[step],
-    options,
-  ) as Given;
+  const { [name]: value, ...rest } = partAt(options, path);
   const others = Object.fromEntries(Object.entries(rest).filter(([each]) => Object.hasOwn(known, each)));
   const own = translated(name, value, known[meantName]!);
   return path.length === 0
@@ -187,13 +211,22 @@ function writeRenamed(options: Given, path: Path, name: string, meantName: strin
     : write(options, path, { ...others, [meantName]: own });
 }
 
+/** The same with a value under another name. */
+function writeKey(options: Given, path: Path, name: string, right: string): string {
+  const { [name]: value, ...others } = partAt(options, path);
+  return write(options, path, { ...others, [right]: value });
+}
+
+const partAt = (options: Given, path: Path): Given =>
+  path.reduce<unknown>((own, step) => (own as Given)[step], options) as Given;
+
 /** A value given under another word, as the option takes it. */
 function translated(word: string, value: unknown, field: Described): unknown {
   const { kind, example } = field;
   const share = /^(alpha|significance)$/i.test(word) && typeof value === "number" ? [1 - value] : [];
   const choice = kind.is === "choice" ? nearestChoice(String(value), kind.of) : undefined;
   const all = [...share, value, [value], choice];
-  return all.find((each) => each !== undefined && faultOf(field, each, []) === undefined) ?? code(example);
+  return all.find((each) => each !== undefined && faultOf(field, each) === undefined) ?? code(example);
 }
 
 function withPart(whole: unknown, [step, ...rest]: Path, part: unknown): Given {

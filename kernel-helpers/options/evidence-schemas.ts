@@ -9,7 +9,7 @@ import type {
 import { fit, observations, onProgress, rule, seed, share, signal } from "./common-options.js";
 import { fitOptions } from "./fit-schemas.js";
 import type { FunctionSchema } from "./function-schema.js";
-import { func, number, oneOf, optional, type Schema, text, whole } from "./option.js";
+import { func, nameOf, number, oneOf, optional, type Schema, whole } from "./option.js";
 
 const { errors, intervals, ...ofFits } = fitOptions;
 
@@ -56,7 +56,7 @@ const compareSchema: FunctionSchema = {
 
 const proposeOptions: Schema<ProposeOptions> = {
   ...ofFits,
-  state: optional(text("N", "the name of a state"), "Name of the state", "the only one"),
+  state: optional(nameOf("state", "N"), "Name of the state", "the only one"),
   errors: optional(
     oneOf("process", "observation"),
     "Where the error lies; without it both are tried, and the record says which, or that it cannot",
@@ -98,7 +98,7 @@ const changePointSchema: FunctionSchema = {
 };
 
 const densityOptions: Schema<DensityOptions> = {
-  state: optional(text("N", "the name of a state"), "Name of the state", "the only one"),
+  state: optional(nameOf("state", "N"), "Name of the state", "the only one"),
   resamples: optional(whole(19, 1999, 10_000_000), "Records drawn without density dependence", 1999),
   seed,
   level: optional(

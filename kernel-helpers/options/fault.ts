@@ -1,4 +1,5 @@
 import type { Field } from "./option.js";
+import type { Role } from "./rule-names.js";
 
 /** Names and places that lead to a value inside the options of a call: `noise`, `N`, `sd`. */
 export type Path = readonly (string | number)[];
@@ -27,5 +28,15 @@ export type Fault =
       readonly path: Path;
       /** One of these. */
       readonly fields: Readonly<Record<string, Field>>;
+    }
+  | {
+      readonly kind: "stranger";
+      /** Of the object, or of the text itself, that has the name. */
+      readonly path: Path;
+      readonly name: string;
+      readonly role: Role;
+      readonly known: readonly string[];
+      /** Whether the name is a key. */
+      readonly isKey: boolean;
     }
   | { readonly kind: "both"; readonly path: Path; readonly names: readonly string[] };

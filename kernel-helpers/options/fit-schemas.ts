@@ -29,13 +29,13 @@ export const fitOptions: Schema<FitOptions> = {
     number({ from: 0 }, 0.1),
     'Standard deviation of the errors where it is known: in the record\'s unit for "normal", on the log scale for "lognormal" (0.1 for a coefficient of variation of 10%); with `errors: "both"` that of the observation',
   ),
-  fixed: optional(valuesByName, "Parameters held at a value, by name"),
+  fixed: optional(valuesByName("parameter"), "Parameters held at a value, by name"),
   bounds: optional(
-    limitsByName,
+    limitsByName("free"),
     'Lowest and highest admitted value, by parameter or by initial state ("N[0]")',
   ),
   start: optional(
-    valuesByName,
+    valuesByName("free"),
     "Where the search begins, by parameter or initial state; what is not named is found from the record",
   ),
   initial: optional(
@@ -43,7 +43,7 @@ export const fitOptions: Schema<FitOptions> = {
     "Initial states that are known exactly, by state (oldest first where the rule reads past values); otherwise a trajectory fit estimates them",
   ),
   factor: optional(
-    named(text("q"), '{ B: "q" }'),
+    named(text("q"), '{ B: "q" }', "state"),
     'By state: the name of an unknown factor by which the record reads it, as `{ B: "q" }` for recorded = q * B',
   ),
   robust: optional(

@@ -1,14 +1,11 @@
 import type { Measure, Target } from "../../src/decision/index.js";
 import { anyNumber } from "./common-options.js";
-import { type Fields, number, optional, required, type Shape, text, type Value, whole } from "./option.js";
+import { type Fields, nameOf, number, optional, required, type Shape, type Value, whole } from "./option.js";
 
 type MeasureKind = Measure extends infer Each ? (Each extends unknown ? keyof Each : never) : never;
 
 /** What a measure is taken of. */
-const name = required(
-  text("N", "the name of a state or quantity of the rule"),
-  "State or quantity that is measured",
-);
+const name = required(nameOf("measured", "N"), "State or quantity that is measured");
 
 const window: Fields = {
   from: optional(whole(1, 1), "First period of the window, counted from the present", 1),
@@ -34,7 +31,7 @@ const kinds: Readonly<Record<Exclude<MeasureKind, "at" | "from" | "to" | "risesT
   time: { fields: { time: name, ...crossed }, oneOf: oneLevel },
   probability: { fields: { probability: name, ...crossed }, oneOf: oneLevel },
   parameter: {
-    fields: { parameter: required(text("r", "the name of a parameter"), "Parameter of the rule") },
+    fields: { parameter: required(nameOf("parameter", "r"), "Parameter of the rule") },
   },
 };
 

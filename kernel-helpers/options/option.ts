@@ -1,3 +1,5 @@
+import { type Role, roleWords } from "./rule-names.js";
+
 /** Lowest and highest admitted number; `above` and `below` leave the end itself out. */
 export interface Range {
   readonly from?: number;
@@ -14,13 +16,13 @@ export interface Range {
 /** What a value may be, as data: the check, the help and the tests read the same. */
 export type Kind =
   | ({ readonly is: "number" } & Range)
-  | { readonly is: "text"; readonly words?: string }
+  | { readonly is: "text"; readonly words?: string; readonly names?: Role }
   | { readonly is: "bigint" | "flag" | "function" | "signal" | "anything" }
   | { readonly is: "choice"; readonly of: readonly string[] }
   /** Also a typed array, where it holds numbers. */
   | { readonly is: "list"; readonly of: Described; readonly length?: number; readonly least?: number }
   /** Values by name, whatever the names are. */
-  | { readonly is: "named"; readonly of: Described }
+  | { readonly is: "named"; readonly of: Described; readonly names?: Role }
   | ({ readonly is: "shape" } & Shape)
   /** A shape for each value of one field. */
   | { readonly is: "variants"; readonly by: string; readonly of: Readonly<Record<string, Fields>> }
@@ -122,6 +124,12 @@ export const text = (example: string, words?: string): Value<string> => ({
   example: JSON.stringify(example),
 });
 
+/** A name of the rule that a call is about. */
+export const nameOf = (names: Role, example: string): Value<string> => ({
+  kind: { is: "text", words: `the name of a ${roleWords[names]}`, names },
+  example: JSON.stringify(example),
+});
+
 export const flag: Value<boolean> = { kind: { is: "flag" }, example: "true" };
 
 export const oneOf = <T extends string>(...values: readonly T[]): Value<T> => ({
@@ -145,8 +153,13 @@ export const pairOf = <T>(of: Value<T>, example: string): Value<readonly [T, T]>
   example,
 });
 
-export const named = <T>(of: Value<T>, example: string): Value<Readonly<Record<string, T>>> => ({
-  kind: { is: "named", of },
+/** @param names - what the names are of, where the rule that a call is about has them. */
+export const named = <T>(
+  of: Value<T>,
+  example: string,
+  names?: Role,
+): Value<Readonly<Record<string, T>>> => ({
+  kind: { is: "named", of, ...(names !== undefined && { names }) },
   example,
 });
 

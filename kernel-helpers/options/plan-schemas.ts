@@ -36,7 +36,7 @@ const groupFields: Schema<Extract<InputPlan, { readonly byGroup: unknown }>> = {
 
 const plan: Value<InputPlan> = either(levelPlan, shapeOf(groupFields, "{ byGroup: { A: 100, B: 300 } }"));
 
-export const plans: Value<InputPlans> = named(plan, "{ payment: 300 }");
+export const plans: Value<InputPlans> = named(plan, "{ payment: 300 }", "input");
 
 /** Where a run of a rule begins. */
 export const startOptions: Schema<StartOptions> = {

@@ -24,6 +24,7 @@ import {
   type Fields,
   listOf,
   named,
+  nameOf,
   number,
   oneOf,
   optional,
@@ -73,6 +74,7 @@ export const processNoise: Value<Readonly<Record<string, ProcessNoise>>> = named
     example: '{ distribution: "lognormal", sd: 0.1 }',
   },
   noiseExample,
+  "state",
 );
 
 export const noise: Value<Readonly<Record<string, Noise | ProcessNoise>>> = named(
@@ -85,10 +87,11 @@ export const noise: Value<Readonly<Record<string, Noise | ProcessNoise>>> = name
     example: '{ distribution: "lognormal", sd: 0.1 }',
   },
   noiseExample,
+  "state",
 );
 
 const watched: Schema<Watch> = {
-  state: optional(text("N"), "Name of the state", "the only one"),
+  state: optional(nameOf("state", "N"), "Name of the state", "the only one"),
   risesTo: optional(anyNumber, "Level that the state rises to, from below, in its unit"),
   fallsTo: optional(anyNumber, "Level that the state falls to, from above, in its unit"),
 };
@@ -137,7 +140,10 @@ const forecastSchema: FunctionSchema = {
 
 const simulateOptions: Schema<SimulateOptions> = {
   ...startOptions,
-  parameters: optional(valuesByName, "Parameters by name; those that the rule holds fixed may be left out"),
+  parameters: optional(
+    valuesByName("parameter"),
+    "Parameters by name; those that the rule holds fixed may be left out",
+  ),
   initial: optional(
     firstValues,
     "First values by state, with lags a list, oldest first; those that the rule states may be left out",
@@ -147,7 +153,7 @@ const simulateOptions: Schema<SimulateOptions> = {
   scenarios: scenarioOption,
   noise: optional(noise, "By state: the random change of each period", "what the rule says"),
   observationNoise: optional(
-    named(error, noiseExample),
+    named(error, noiseExample, "state"),
     "By state: the observation error, which is reported and not carried on",
   ),
   paths: optional(whole(1, 4000), "Random paths", "4000, or 1 where nothing is random"),

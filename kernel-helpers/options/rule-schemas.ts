@@ -45,11 +45,11 @@ const namedRuleOptions: Schema<NamedRuleOptions> = {
   ),
   units: optional(named(text("EUR"), '{ owed: "EUR" }'), "Unit by name"),
   bounds: optional(
-    limitsByName,
+    limitsByName(),
     "Lowest and highest admitted value by state or parameter; infinite where open",
   ),
-  start: optional(valuesByName, "Where a fit starts, by parameter"),
-  fixed: optional(valuesByName, "Parameters that no fit changes, by name"),
+  start: optional(valuesByName(), "Where a fit starts, by parameter"),
+  fixed: optional(valuesByName(), "Parameters that no fit changes, by name"),
   initial: optional(
     named(either(firstValue, oneOf("estimated")), "{ N: 10 }"),
     'By state: its first value, its first values oldest first where the rule reads past ones, or "estimated"',

@@ -12,6 +12,10 @@ export function code(text: string): Code {
   return made;
 }
 
+/** The text of a piece of code. */
+export const codeOf = (value: unknown): string | undefined =>
+  typeof value === "object" && value !== null && codes.has(value) ? (value as Code).code : undefined;
+
 /** Whether a value is an object without a class; one made in another realm, as that of a cell, is one too. */
 export const isPlain = (value: unknown): value is Readonly<Record<string, unknown>> => {
   if (typeof value !== "object" || value === null || Array.isArray(value)) return false;
@@ -35,7 +39,8 @@ export function typed(value: unknown): string | undefined {
 }
 
 function literal(value: unknown): string {
-  if (typeof value === "object" && value !== null && codes.has(value)) return (value as Code).code;
+  const text = codeOf(value);
+  if (text !== undefined) return text;
   if (Array.isArray(value)) return `[${value.map(literal).join(", ")}]`;
   if (isPlain(value)) {
     const fields = Object.entries(value).map(([name, own]) => `${key(name)}: ${literal(own)}`);

@@ -44,7 +44,7 @@ export function errorAdvice(
   group: GroupFit,
   draws: number,
   stream: RandomStream,
-  tick: Tick,
+  tick: Tick = () => undefined,
 ): ErrorAdvice | undefined {
   const process = sideOf(fit, group, "process");
   const observation = sideOf(fit, group, "observation");

@@ -48,7 +48,7 @@ export function recovery(
   group: GroupFit,
   wanted: number,
   stream: RandomStream,
-  tick: Tick,
+  tick: Tick = () => undefined,
 ): Recovery | undefined {
   const attempt = squaresAttempt(fit, group) ?? likelihoodAttempt(fit, group);
   if (attempt === undefined) return undefined;
