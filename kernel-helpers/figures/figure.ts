@@ -1,4 +1,5 @@
 import { frozenCopy } from "../../src/numeric/index.js";
+import type { PeriodAxis } from "../../src/record/index.js";
 import { checkCall } from "../options/index.js";
 import { type Bundle, showing, type Table } from "../tables/index.js";
 import { figureBundle } from "./figure-bundle.js";
@@ -17,6 +18,8 @@ export interface Axis {
   readonly scale?: "linear" | "log" | "category" | "date";
   /** Ends of the axis, in its unit; default what the layers need. */
   readonly ends?: readonly [number, number];
+  /** The periods that places on the axis stand for, where these have labels; `zero` is the place of period 0. */
+  readonly periods?: { readonly axis: PeriodAxis; readonly zero: number };
   /**
    * Whether it has no ticks and grid: where places along the axis have no meaning of their own; default
    * false.

@@ -1,4 +1,4 @@
-import type { Fit } from "../../src/estimate/index.js";
+import { type Fit, problemOf } from "../../src/estimate/index.js";
 
 /** A file that was read into the case. */
 export interface RecordNote {
@@ -110,12 +110,12 @@ const recordOf = ({ observations }: Fit): object => observations.groups[0]!.time
 
 /** The same rule with the same kind of errors on the same record, though it may have been fitted twice. */
 function isSameModel(one: Fit, other: Fit): boolean {
-  const { errors, distribution = "normal", groups = "separate" } = one.options;
+  const [a, b] = [problemOf(one), problemOf(other)];
   return (
     recordOf(one) === recordOf(other) &&
     one.rule.text === other.rule.text &&
-    errors === other.options.errors &&
-    distribution === (other.options.distribution ?? "normal") &&
-    groups === (other.options.groups ?? "separate")
+    a.errors === b.errors &&
+    a.distribution === b.distribution &&
+    a.groups === b.groups
   );
 }

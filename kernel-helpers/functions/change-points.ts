@@ -12,7 +12,9 @@ import { type Figure, figure, type Panel } from "../figures/index.js";
 import { checkCall } from "../options/index.js";
 import type { ChangePoint } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
+import { acrossGroup, periodColumn } from "./across-periods.js";
 import { caseLog } from "./case-log.js";
+import { cautionsByGroup } from "./cautions-by-group.js";
 import { seededRun } from "./seeded-run.js";
 import { presentFitIn } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
@@ -56,16 +58,15 @@ export function densityDependence(
 }
 
 function breaksTable(looked: EngineChangePoint): Table {
-  const { period } = looked.fit.observations;
-  const date = { kind: "number", digits: 6, unit: period.unit, grouped: false } as const;
+  const { axis } = looked.fit.observations;
   const percent = Math.round(100 * looked.level);
   return table({
     title: `One change in the parameters of ${ruleLabel(looked.fit.rule)}`,
     columns: [
       ...(looked.groups.length > 1 ? [{ key: "group", label: "Group", kind: "text" } as const] : []),
-      { key: "date", label: "Likeliest date", ...date },
-      { key: "earliest", label: `${percent}% interval, from`, ...date },
-      { key: "latest", label: "to", ...date },
+      periodColumn("date", "Likeliest date", axis),
+      periodColumn("earliest", `${percent}% interval, from`, axis),
+      periodColumn("latest", "to", axis),
       { key: "statistic", label: "Largest F", kind: "number", digits: 3 },
       { key: "probability", label: "By chance", kind: "probability", pairedWith: "probabilityError" },
       { key: "name", label: "Parameter", kind: "text" },
@@ -75,6 +76,7 @@ function breaksTable(looked: EngineChangePoint): Table {
     rows: looked.groups.flatMap((group) =>
       Object.keys(group.before.parameters).map((name) => ({
         ...group,
+        ...(axis.counts !== "numbers" && group.labels),
         name,
         before: group.before.parameters[name],
         after: group.after.parameters[name],
@@ -82,6 +84,7 @@ function breaksTable(looked: EngineChangePoint): Table {
     ),
     notes: [
       looked.sentence,
+      ...cautionsByGroup([{ group: "", warnings: looked.fit.warnings }]),
       `Held against the largest F of ${looked.resamples} records drawn without a break; an F table would call a break far too often.`,
     ],
   });
@@ -89,10 +92,10 @@ function breaksTable(looked: EngineChangePoint): Table {
 
 function breaksFigure(looked: EngineChangePoint): Figure {
   const { observations, rule } = looked.fit;
-  const x = { title: observations.period.column, unit: observations.period.unit };
   const panels = looked.groups.flatMap((group): Panel[] => {
     const recorded = observations.groups.find((each) => each.name === group.group)!;
     const [state] = observations.states;
+    const x = acrossGroup(recorded);
     const marks = [
       { mark: "vertical", name: "likeliest date", x: group.date } as const,
       { mark: "vertical", name: "earliest", x: group.earliest, inLegend: false } as const,

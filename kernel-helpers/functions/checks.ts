@@ -4,6 +4,7 @@ import { ruleLabel } from "../../src/rule/index.js";
 import { checkCall } from "../options/index.js";
 import type { Check } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
+import { periodColumn } from "./across-periods.js";
 import { caseLog } from "./case-log.js";
 import { residualPanels } from "./residual-panels.js";
 import { seededRun } from "./seeded-run.js";
@@ -99,14 +100,14 @@ function recoveryTable(checked: EngineCheck): Table {
 }
 
 function windowsTable(checked: EngineCheck): Table {
-  const { period } = checked.fit.observations;
+  const { axis } = checked.fit.observations;
   return table({
     title: "Estimates from parts of the record",
     columns: [
       ...groupColumn(checked),
       { key: "part", label: "Part", kind: "text" },
-      { key: "from", label: `${period.column}, from`, unit: period.unit, kind: "number", digits: 6 },
-      { key: "to", label: "to", unit: period.unit, kind: "number", digits: 6 },
+      periodColumn("from", `${axis.column}, from`, axis),
+      periodColumn("to", "to", axis),
       { key: "name", label: "Parameter", kind: "text" },
       { key: "value", label: "Estimate", kind: "number", digits: 4 },
       { key: "shift", label: "Moved by standard errors", kind: "number", digits: 2 },
@@ -116,8 +117,8 @@ function windowsTable(checked: EngineCheck): Table {
         window.estimates.map((estimate) => ({
           group: group.group,
           part: window.name,
-          from: window.from,
-          to: window.to,
+          from: axis.counts === "numbers" ? window.from : window.periods[0],
+          to: axis.counts === "numbers" ? window.to : window.periods[1],
           ...estimate,
           shift: estimate.shift ?? "not determined",
         })),

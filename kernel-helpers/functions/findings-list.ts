@@ -51,7 +51,7 @@ function measuredWords({ states, flows = [] }: Observations): string {
 
 /** Period, step, whether levels or flows, and the order of events, in one line. */
 export function periodSentence(observations: Observations): string {
-  const { column, step, calendar } = observations.period;
+  const { column, step, calendar } = observations.axis;
   const counted = calendar ?? (step.every === 1 ? `1 ${step.of}` : `${step.every} ${step.of}s`);
   const order = observations.order === "" ? "not stated" : observations.order;
   return `Period "${column}", one step is ${counted}; ${measuredWords(observations)}; order of events: ${order}.`;

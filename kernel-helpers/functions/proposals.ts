@@ -4,10 +4,12 @@ import {
   propose as tryCatalogue,
 } from "../../src/evidence/index.js";
 import type { Observations } from "../../src/record/index.js";
+import { type RuleCatalogue, shortNames } from "../../src/rule/index.js";
 import { type Figure, figure } from "../figures/index.js";
 import { checkCall } from "../options/index.js";
 import type { Proposal } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
+import { acrossGroup } from "./across-periods.js";
 import { caseLog } from "./case-log.js";
 import { seededRun } from "./seeded-run.js";
 import { presentFit } from "./show-fit.js";
@@ -39,7 +41,8 @@ function proposalTable(proposal: EngineProposal): Table {
   return table({
     title: "Rules of the catalogue tried on this record",
     columns: [
-      { key: "name", label: "Rule", kind: "text" },
+      { key: "rule", label: "Rule", kind: "text" },
+      { key: "call", label: "In the catalogue", kind: "text" },
       { key: "errors", label: "Error in the", kind: "text" },
       { key: "parameters", label: "Unknowns", kind: "integer" },
       { key: "difference", label: "AICc above the lowest", kind: "number", digits: 3 },
@@ -48,6 +51,7 @@ function proposalTable(proposal: EngineProposal): Table {
     ],
     rows: proposal.rows.map((row) => ({
       ...row,
+      call: `rules.${row.name}`,
       heldOut: row.heldOut ?? "not forecast",
       answer: row.supported ? supportedText(row.undetermined) : row.reason,
     })),
@@ -63,22 +67,27 @@ function leftOutTable(proposal: EngineProposal): Table {
   return table({
     title: "Rules that were not tried",
     columns: [
-      { key: "name", label: "Rule", kind: "text" },
+      { key: "rule", label: "Rule", kind: "text" },
+      { key: "call", label: "In the catalogue", kind: "text" },
       { key: "reason", label: "Because it", kind: "text" },
     ],
-    rows: proposal.notTried.map((row) => ({ ...row })),
+    rows: proposal.notTried.map(({ name, reason }) => ({
+      rule: shortNames[name as keyof RuleCatalogue],
+      call: `rules.${name}`,
+      reason,
+    })),
   });
 }
 
 function supportedFigure(proposal: EngineProposal): Figure {
-  const { period, states, groups } = proposal.fits[0]!.observations;
+  const { states, groups } = proposal.fits[0]!.observations;
   const [state] = states;
   const names = proposal.rows.filter((row) => row.supported);
   return figure({
     title: "The record and the rules it supports",
     panels: groups.map((group) => ({
       title: group.name,
-      x: { title: period.column, unit: period.unit },
+      x: acrossGroup(group),
       y: { title: state!.column, unit: state!.unit },
       layers: [
         ...proposal.fits.map((fit, i) => {
@@ -86,7 +95,7 @@ function supportedFigure(proposal: EngineProposal): Figure {
           const kind = proposal.errors === "undecided" ? `, error in the ${names[i]!.errors}` : "";
           return {
             mark: "line",
-            name: `${names[i]!.name}${kind}`,
+            name: `${names[i]!.rule}${kind}`,
             x: points.map((point) => point.time),
             y: points.map((point) => point.fitted),
           } as const;

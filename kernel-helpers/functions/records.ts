@@ -12,7 +12,7 @@ import {
   tableOfRows,
 } from "../../src/record/index.js";
 import {
-  holdsSeveral,
+  holdsSeveralTables,
   type NamedTable,
   type ReadOptions,
   type RecordSource,
@@ -96,7 +96,7 @@ function withDecisions(
 ): readonly NamedTable[] {
   const { decisions = [] } = record;
   const shown = { name: table ?? "record", table: shownTable(record) };
-  if (decisions.length === 0 || !holdsSeveral(path, format)) return [shown];
+  if (decisions.length === 0 || !holdsSeveralTables(path, format)) return [shown];
   const name = table === undefined ? "decisions" : `${table} decisions`;
   return [shown, { name, table: tableOfRows(decisionRows(decisions)) }];
 }
@@ -137,12 +137,12 @@ function noteSource({ path, rows, checksum }: RecordSource): void {
 
 /** For the rerun block: how the record was read, and each choice of the options that changed a value. */
 function noteObservations(
-  { states, period, decisions = [] }: EngineObservations,
+  { states, axis, decisions = [] }: EngineObservations,
   known: readonly Decision[],
 ): void {
   const names = states.map(({ column }) => `"${column}"`).join(", ");
   caseLog.noteStep(
-    `observations of ${names} by "${period.column}" in steps of ${period.calendar ?? `${period.step.every} ${period.step.of}`}`,
+    `observations of ${names} by "${axis.column}" in steps of ${axis.calendar ?? `${axis.step.every} ${axis.step.of}`}`,
   );
   for (const decision of decisions)
     if (!known.includes(decision)) caseLog.noteStep(`decision: ${decisionSentence(decision)}`);

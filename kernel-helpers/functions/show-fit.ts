@@ -3,12 +3,14 @@ import {
   type EstimateRow,
   estimates,
   type GroupFit,
+  problemOf,
   secondOpinion,
 } from "../../src/estimate/index.js";
 import { ruleLabel } from "../../src/rule/index.js";
 import { type Figure, fittedFigure, profileFigure } from "../figures/index.js";
 import { type Fit, withEstimates } from "../results/index.js";
 import { showing, superscript, type Table, table } from "../tables/index.js";
+import { acrossGroup, acrossRecord } from "./across-periods.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
 import { ruleNotes } from "./rule-title.js";
 import { presentObservations } from "./show-observations.js";
@@ -39,7 +41,7 @@ function estimatesTable(fitted: EngineFit): Table {
     lower: limit(row.profile.lower),
     upper: limit(row.profile.upper),
   }));
-  const percent = `${100 * (fitted.options.level ?? 0.95)}%`;
+  const percent = `${100 * problemOf(fitted).level}%`;
   return table({
     title: `Estimates of ${ruleLabel(fitted.rule)}`,
     columns: [
@@ -68,28 +70,28 @@ function estimatesTable(fitted: EngineFit): Table {
 
 function groupNotes(fitted: EngineFit, group: GroupFit): string[] {
   const who = group.group === "" ? "" : `${group.group}: `;
-  const { digits, sentence } = secondOpinion(fitted, group);
-  const told =
-    digits !== undefined && fitted.groups.length > 1 ? `second solver agrees to ${digits} digits` : sentence;
+  const opinion = fitted.groups.length === 1 ? secondOpinion(fitted, group) : undefined;
+  const criteria = group.criteria === undefined ? "" : `, AICc ${group.criteria.aicCorrected.toFixed(2)}`;
   const sigma = group.sigma.toPrecision(3);
   return [
-    `${who}${group.count} residuals, sigma ${sigma}, AICc ${group.criteria.aicCorrected.toFixed(2)}. ${told}`,
+    `${who}${group.count} residuals, sigma ${sigma}${criteria}.${opinion ? ` ${opinion.sentence}` : ""}`,
   ];
 }
 
 function observedAndFitted(fitted: EngineFit): Figure[] {
-  const { period, states } = fitted.observations;
-  const x = { title: period.column, unit: period.unit };
+  const { states } = fitted.observations;
   return states.map((state) =>
     fittedFigure({
       title: `Observed and fitted: ${ruleLabel(fitted.rule)}`,
-      x,
+      x: acrossRecord(fitted.observations),
       y: { title: state.name, unit: state.unit },
       series: fitted.groups.map((group) => {
         const points = group.points.filter((point) => point.state === state.name);
         const time = points.map((point) => point.time);
+        const recorded = fitted.observations.groups.find(({ name }) => name === group.group)!;
         return {
           name: group.group,
+          x: acrossGroup(recorded),
           observed: { name: "observed", x: time, y: points.map((point) => point.observed) },
           fitted: [{ name: "fitted", x: time, y: points.map((point) => point.fitted) }],
         };
@@ -98,23 +100,18 @@ function observedAndFitted(fitted: EngineFit): Figure[] {
   );
 }
 
-/** Whether a profile is one of a sum of squares. */
-function bySquares({ options }: EngineFit, { estimates: all }: GroupFit): boolean {
-  const counts = options.distribution === "poisson" || options.distribution === "negative-binomial";
-  return !counts && all.every(({ role }) => role !== "scale");
-}
-
 /** Profiles of every parameter; of one group, because a figure of many profiles is read by nobody. */
 function profiles(fitted: EngineFit): Figure | undefined {
   const [group] = fitted.groups;
   if (group === undefined || fitted.groups.length > 1) return undefined;
   return profileFigure({
     title: "Profiles of the parameters",
-    measure: bySquares(fitted, group)
-      ? "Rise of the sum of squares / sigma²"
-      : "Twice the fall of the log-likelihood",
+    measure:
+      problemOf(fitted).group(group.group).kind === "least-squares"
+        ? "Rise of the sum of squares / sigma²"
+        : "Twice the fall of the log-likelihood",
     cut: group.cut,
-    level: `${100 * (fitted.options.level ?? 0.95)}%`,
+    level: `${100 * problemOf(fitted).level}%`,
     profiles: group.estimates.map(({ name, unit, value, profile, trace }) => ({
       parameter: name,
       unit,

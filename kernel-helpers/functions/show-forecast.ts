@@ -3,6 +3,7 @@ import { ruleLabel } from "../../src/rule/index.js";
 import { type FanFigureOptions, type Figure, fanFigure, type ProjectedSeries } from "../figures/index.js";
 import { groupName } from "../results/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
+import { acrossGroup, acrossRecord, periodColumn } from "./across-periods.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
 
 /** A forecast as a reader sees it: fans, then the numbers ahead, then how scenarios differ. */
@@ -35,7 +36,7 @@ export function decidingFan(
 function fanOf(ahead: Forecast, state: string): Omit<FanFigureOptions, "title"> {
   const { observations } = ahead.fit;
   return {
-    x: { title: observations.period.column, unit: observations.period.unit },
+    x: acrossRecord(observations),
     y: { title: state, unit: observations.states.find((each) => each.name === state)?.unit ?? "" },
     series: ahead.groups.map((group) => projected(ahead, group, state)),
     notes: notesOf(ahead),
@@ -50,6 +51,7 @@ function projected(ahead: Forecast, group: GroupForecast, name: string): Project
   const horizon = group.predictability?.predictionHorizon;
   return {
     name: groupName(group),
+    x: acrossGroup(recorded),
     recorded: { name: "recorded", x: recorded.time, y: recorded.values[name]! },
     central: { name: "fitted path", x, y: state.central },
     bands: state.bands
@@ -68,7 +70,7 @@ function aheadTable(ahead: Forecast): Table {
   const level = Math.max(...ahead.options.levels);
   const each = periodsShown(ahead.options.periods, ahead.groups.length * ahead.fit.rule.states.length);
   const rows = ahead.groups.flatMap((group) => rowsAhead(group, level, each));
-  const dated = ahead.groups.some((group) => group.labels !== undefined);
+  const { axis } = ahead.fit.observations;
   const unit = ahead.groups[0]?.states[0]?.unit ?? "";
   const number = { kind: "number", digits: 4, unit } as const;
   const percent = `${Number((100 * level).toPrecision(12))}%`;
@@ -77,15 +79,7 @@ function aheadTable(ahead: Forecast): Table {
     columns: [
       ...several("group", "Group", ahead.groups.map(groupName)),
       ...several("state", "State", ahead.fit.rule.states),
-      dated
-        ? { key: "time", label: ahead.fit.observations.period.column, kind: "text" }
-        : {
-            key: "time",
-            label: ahead.fit.observations.period.column,
-            kind: "number",
-            digits: 6,
-            grouped: false,
-          },
+      periodColumn("time", axis.column, axis),
       { key: "central", label: "Fitted path", ...number },
       { key: "meanLower", label: `Mean path ${percent}, from`, ...number },
       { key: "meanUpper", label: "to", ...number },

@@ -33,6 +33,7 @@ import {
   required,
   type Schema,
   shapeOf,
+  text,
   whole,
 } from "./option.js";
 import { plans, startOptions } from "./plan-schemas.js";
@@ -125,6 +126,8 @@ const sensitivitySchema: FunctionSchema = {
   sizes,
 };
 
+const periodLabel = either(anyNumber, text("2027-12", "the label of a period"));
+
 const ends = {
   from: required(anyNumber, "First value"),
   to: required(anyNumber, "Last value"),
@@ -183,10 +186,16 @@ const nextReadingOptions: Schema<NextReadingOptions> = {
   ),
   values: optional(
     either(
-      listOf(anyNumber, "[21, 24]"),
-      shapeOf<{ readonly from: number; readonly to: number }>(ends, "{ from: 20, to: 30 }"),
+      listOf(periodLabel, "[21, 24]"),
+      shapeOf<{ readonly from: number | string; readonly to: number | string }>(
+        {
+          from: required(periodLabel, "First period, by number or label"),
+          to: required(periodLabel, "Last period, by number or label"),
+        },
+        "{ from: 20, to: 30 }",
+      ),
     ),
-    "Times at which it could be taken, in the unit of the period column: a list, or two ends",
+    "Periods at which it could be taken, by number or label: a list, or two ends",
     "every period from the first on",
   ),
   answer: optional(measure, "Measure whose margin is to be narrowed; needed for a single fit"),

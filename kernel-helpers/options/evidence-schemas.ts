@@ -75,6 +75,11 @@ const proposeSchema: FunctionSchema = {
 
 const changePointOptions: Schema<ChangePointOptions> = {
   ...ofFits,
+  distribution: optional(
+    oneOf("normal", "lognormal"),
+    "Normal errors on the natural or on the log scale; counts are not searched for a break",
+    '"normal"',
+  ),
   leastShare: optional(
     number({ above: 0, below: 0.5 }, 0.15),
     "Least share of the record on either side of a break, between 0 and 0.5",

@@ -87,9 +87,10 @@ const expandingSchema: FunctionSchema = {
 const toPeriodsOptions: Schema<ToPeriodsOptions> = {
   ...periodsOf,
   to: required(stepOrCalendar, "Length of the longer periods, or their calendar"),
-  take: required(
-    named(summary, '{ sold: "sum" }'),
-    'What is taken of each column: a flow adds up ("sum"), a level at an instant is its "last" one',
+  take: optional(named(summary, '{ sold: "sum" }'), "By column, how its values become one"),
+  measured: optional(
+    named(oneOf("level", "flow"), '{ owed: "level", sold: "flow" }'),
+    "By column, what it is: of a level the last value is taken, of a flow the sum",
   ),
 };
 

@@ -1,6 +1,17 @@
-import type { Measure, Target } from "../../src/decision/index.js";
+import type { Measure, SolveOptions } from "../../src/decision/index.js";
 import { anyNumber } from "./common-options.js";
-import { type Fields, nameOf, number, optional, required, type Shape, type Value, whole } from "./option.js";
+import {
+  either,
+  type Fields,
+  nameOf,
+  number,
+  optional,
+  required,
+  type Shape,
+  text,
+  type Value,
+  whole,
+} from "./option.js";
 
 type MeasureKind = Measure extends infer Each ? (Each extends unknown ? keyof Each : never) : never;
 
@@ -40,15 +51,17 @@ export const measure: Value<Measure> = {
   example: '{ time: "owed", fallsTo: 0 }',
 };
 
-export const target: Value<Target> = {
+const aim = either(anyNumber, text("2027-12", "the label of a period"));
+
+export const target: Value<SolveOptions["until"]> = {
   kind: {
     is: "measures",
     of: kinds,
     also: {
       fields: {
-        is: optional(anyNumber, "Value that the measure must have"),
-        atMost: optional(anyNumber, "Largest value that the measure may have"),
-        atLeast: optional(anyNumber, "Smallest value that the measure may have"),
+        is: optional(aim, "Value that the measure must have, or the period of a time by its label"),
+        atMost: optional(aim, "Largest value that the measure may have, or latest period of a time"),
+        atLeast: optional(aim, "Smallest value that the measure may have, or earliest period of a time"),
       },
       oneOf: [["is", "atMost", "atLeast"]],
     },

@@ -110,11 +110,19 @@ const scenarioOption = optional(
   "Several plans of inputs side by side, by the name of the scenario, run with the same random numbers",
 );
 
+const label = either(text("2026-06", "the label of a period"), number({}, 28));
+
 const forecastOptions: Schema<ForecastOptions> = {
   periods: required(whole(1, 12), "Whole periods beyond the last recorded one"),
   from: optional(
-    either(text("2026-06", "the label of a period"), number({}, 28)),
-    "The recorded period to start after, by its label or number",
+    either(
+      label,
+      shapeOf<Extract<NonNullable<ForecastOptions["from"]>, object>>(
+        { byGroup: required(named(label, '{ A: "2026-06" }'), "One a group") },
+        '{ byGroup: { A: "2026-06" } }',
+      ),
+    ),
+    "The recorded period to start after, by its label or number, or one a group",
     "the last one",
   ),
   inputs: optional(

@@ -106,6 +106,11 @@ const tabSeparatedSchema: FunctionSchema = {
   example: "tabSeparated(table({ title, columns, rows }))",
 };
 
+const axisPeriods: Schema<NonNullable<Axis["periods"]>> = {
+  axis: required(anything<NonNullable<Axis["periods"]>["axis"]>("axis"), "Axis of the periods"),
+  zero: required(anyNumber, "Place of period 0"),
+};
+
 const axis: Schema<Axis> = {
   title: required(text("Week"), "What the axis measures"),
   unit: optional(text("cells/mL"), "Its unit", '"" (none)'),
@@ -113,6 +118,10 @@ const axis: Schema<Axis> = {
     oneOf("linear", "log", "category", "date"),
     'How places lie along it: "category" for names, "date" for calendar dates as ISO text',
     '"linear"',
+  ),
+  periods: optional(
+    shapeOf(axisPeriods, "{ axis, zero: 0 }"),
+    "The periods that places on the axis stand for, where these have labels; `zero` is the place of period 0",
   ),
   ends: optional(pair, "Ends of the axis, in its unit", "what the layers need"),
   bare: optional(

@@ -1,9 +1,15 @@
-import type { Fit as EngineFit, GroupFit as EngineGroupFit, Estimate } from "../../src/estimate/index.js";
+import {
+  type Fit as EngineFit,
+  type GroupFit as EngineGroupFit,
+  type Estimate,
+  problemOf,
+} from "../../src/estimate/index.js";
 import type { ModelError } from "../../src/numeric/index.js";
 import { attach } from "./attach.js";
 import { noIntervalError, unknownValueError } from "./errors.js";
 import { groupNamed, onlyGroup } from "./group-named.js";
 import { namedValues } from "./named-values.js";
+import { type Observations, withLast } from "./record-shortcuts.js";
 
 /** What was estimated, by name; left out of listings and copies of the fit. */
 export interface EstimatedValues {
@@ -24,6 +30,9 @@ export interface GroupFit extends EngineGroupFit, EstimatedValues {}
 
 /** A rule with its parameters estimated from a record; `values` and `interval` speak of its only group. */
 export interface Fit extends EngineFit, EstimatedValues {
+  readonly observations: Observations;
+  /** Residual standard deviation of its only group, on the fitting scale; of groups fitted together the common one. */
+  readonly sigma: number;
   readonly groups: readonly GroupFit[];
   /** A group of the record by its name. */
   readonly group: (name: string) => GroupFit;
@@ -31,24 +40,26 @@ export interface Fit extends EngineFit, EstimatedValues {
 
 /** Gives a fit and each of its groups the shortcuts to what was estimated. */
 export function withEstimates(fit: EngineFit): Fit {
+  withLast(fit.observations);
   for (const group of fit.groups) attach<EngineGroupFit, EstimatedValues>(group, ofGroup(fit, group));
   const groups = fit.groups as readonly GroupFit[];
-  const shared = fit.options.groups === "combined" ? fit.population : undefined;
-  const own = <Member extends keyof EstimatedValues>(member: Member): EstimatedValues[Member] =>
+  const shared = problemOf(fit).groups === "combined" ? fit.population : undefined;
+  const own = <Member extends "values" | "interval" | "sigma">(member: Member): GroupFit[Member] =>
     onlyGroup("fit", member, groups)[member];
   return attach(fit, {
     ...(shared !== undefined && groups.length > 1
-      ? ofAllGroups(fit, shared)
-      : { values: () => own("values"), interval: () => own("interval") }),
+      ? { ...ofAllGroups(fit, shared), sigma: () => groups[0]!.sigma }
+      : { values: () => own("values"), interval: () => own("interval"), sigma: () => own("sigma") }),
     group: () => (name: string) => groupNamed("fit", groups, name),
   }) as Fit;
 }
 
 type Makers = { readonly [Name in keyof EstimatedValues]: () => EstimatedValues[Name] };
 
-function ofGroup({ rule, options }: EngineFit, group: EngineGroupFit): Makers {
+function ofGroup(fit: EngineFit, group: EngineGroupFit): Makers {
+  const { rule } = fit;
   const reach = Math.max(0, ...rule.lags.map(({ lag }) => lag));
-  const given = options.errors === "observation" ? rule.states : [];
+  const given = problemOf(fit).errors === "observation" ? rule.states : [];
   const held = {
     ...group.parameters,
     ...Object.fromEntries(given.map((state) => [`${state}[${reach}]`, group.initial[state]!])),

@@ -169,10 +169,18 @@ export function refuseNoPurpose(): ModelError {
   );
 }
 
-export function refuseNoCandidate(from: number, to: number): ModelError {
+export function refuseNoCandidate(from: string, to: string): ModelError {
   return new ModelError(
     "no-candidate",
     `No reading can be taken at the times asked for; the rules know times from ${from} to ${to}, and with errors in the process only those after the record.`,
     { from, to },
+  );
+}
+
+export function refusePeriod(period: string, first: string, second: string): ModelError {
+  return new ModelError(
+    "unknown-period",
+    `"${period}" names no single period of the projection; its periods are ${first}, ${second} and so on.`,
+    { period },
   );
 }

@@ -59,6 +59,22 @@ export function refuseUnmatchedStates(states: readonly string[], recorded: reado
   );
 }
 
+export function unitScaleError(
+  state: string,
+  column: string,
+  recorded: string,
+  stated: string,
+  factor: number,
+): ModelError {
+  const times = Number((factor < 1 ? 1 / factor : factor).toPrecision(6));
+  return new ModelError(
+    "unit-scales-differ",
+    `The record gives "${column}" in ${recorded}, and the rule states ${stated} for ${state}: a factor of ${times} apart. ` +
+      `Write \`units: { ${state}: "${recorded}" }\` with the rule, or convert the column and state \`unit: "${stated}"\` in observations(...).`,
+    { state, column, recorded, stated, factor },
+  );
+}
+
 export function refuseMissingInput(input: string, group: ObservedGroup): ModelError {
   return new ModelError(
     "input-not-recorded",
@@ -105,6 +121,15 @@ export function refuseNoStart(group: ObservedGroup, ruleText: string): ModelErro
     `No parameters were found at which "${ruleText}" stays finite over the record${named(group)}. Give ` +
       "{ start: { ... } } near plausible values, or { bounds: { ... } } that keep the rule in its range.",
     { group: group.name, rule: ruleText },
+  );
+}
+
+export function refuseStepsFromZero(group: ObservedGroup, row: number, ruleText: string): ModelError {
+  return new ModelError(
+    "step-from-zero",
+    `Row ${row}${named(group)} is a count of 0 and the next one is not: with \`errors: "process"\` every step starts from the ` +
+      `recorded count, and "${ruleText}" stays at 0. Write \`errors: "observation"\`, which fits the whole trajectory.`,
+    { group: group.name, row, rule: ruleText },
   );
 }
 
@@ -175,11 +200,27 @@ export function refuseFactor(errors: string): ModelError {
   );
 }
 
-export function refuseResampling(): ModelError {
+export function refuseSharedParameters(): ModelError {
+  return new ModelError(
+    "groups-together",
+    "Groups that share parameters cannot be resampled one by one. Read the profile intervals of the fit, or fit them with " +
+      '`groups: "separate"`.',
+  );
+}
+
+export function refuseNoDraws(): ModelError {
+  return new ModelError(
+    "not-simulated",
+    "No records can be simulated from this fit: it has censored values, whose limits are not known for the exact ones, or " +
+      "counts with weights, which stand for no single count. Read the profile intervals of the fit.",
+  );
+}
+
+export function refuseNotBySquares(what: string): ModelError {
   return new ModelError(
     "not-by-least-squares",
-    "Records are simulated anew from fits by least squares of each group on its own. This fit was made by another likelihood, of " +
-      "groups together, or robustly: read its profiles.",
+    `${what} works on fits by least squares of each group on its own. Counts, censored values, errors in both and groups ` +
+      "together have profile intervals instead.",
   );
 }
 
@@ -218,7 +259,8 @@ export function refuseNoNewRows(): ModelError {
 export function refuseNoResiduals(): ModelError {
   return new ModelError(
     "no-residuals",
-    'A fit with errors in both has predictions, not residuals, so they cannot be drawn anew. Use bootstrap(fit, { errors: "parametric" }).',
+    "Residuals of counts, and predictions of a fit with errors in both, cannot be put on other fitted values. Use " +
+      '`errors: "parametric"`, which draws from the fitted distribution.',
   );
 }
 

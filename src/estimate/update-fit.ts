@@ -1,6 +1,5 @@
 import { joined, type Observations } from "../record/index.js";
-import type { Fit } from "./fit.js";
-import { fit as fitRule } from "./fit.js";
+import { type Fit, problemOf } from "./fit.js";
 import { matchStates } from "./options/match-states.js";
 import { refuseNoNewRows, refuseUnknownName } from "./refusals.js";
 
@@ -48,7 +47,7 @@ export function updateFit(before: Fit, later: Observations): UpdatedFit {
   const added: Record<string, number> = {};
   for (const name of known) added[name] = more.groups.find((each) => each.name === name)?.index.length ?? 0;
   if (Object.values(added).every((count) => count === 0)) throw refuseNoNewRows();
-  const now = fitRule(before.rule, joined(before.observations, more), before.options);
+  const now = problemOf(before).refit({ observations: joined(before.observations, more) });
   const changes = before.groups.flatMap((was, g) => changesOf(was, now.groups[g]!));
   const remarks = changes
     .filter(({ moved }) => moved !== undefined && Math.abs(moved) > notable)

@@ -1,4 +1,4 @@
-import type { Fit, GroupFit } from "../estimate/index.js";
+import { type Fit, type GroupFit, problemOf } from "../estimate/index.js";
 import { type RandomStream, reporter } from "../numeric/index.js";
 import { indexOf, labelAt, labelsAt, periodWords } from "../record/index.js";
 import { dependsOnPeriod } from "../rule/index.js";
@@ -12,7 +12,6 @@ import { type FitGround, fitGround } from "./fit-ground.js";
 import type { ForecastOptions, ForecastSettings } from "./forecast-options.js";
 import { forecastWarnings } from "./forecast-warnings.js";
 import type { Scenario } from "./inputs/scenarios.js";
-import { fittedNoise } from "./noise/fitted-noise.js";
 import { noiseDraw } from "./noise/noise.js";
 import { type DrawnStarts, drawnStarts, type UnknownsDraw, unknownsDraw } from "./parameters/drawn-starts.js";
 import { type Predictability, predictabilityOf } from "./predictability.js";
@@ -37,14 +36,15 @@ export function forecastGroup(
 }
 
 /** The index of the period to start after; undefined for the last recorded one. */
-function startsAfter(fit: Fit, { group }: GroupFit, from: ForecastOptions["from"]): number | undefined {
+function startsAfter(fit: Fit, { group }: GroupFit, asked: ForecastOptions["from"]): number | undefined {
+  const from = typeof asked === "object" ? asked.byGroup[group] : asked;
   if (from === undefined) return undefined;
   const { axis, index } = fit.observations.groups.find(({ name }) => name === group)!;
   const last = index[index.length - 1]!;
   const found = indexOf(axis, from);
   if (found === undefined || found < 0 || found > last)
     throw refuseFrom(from, labelAt(axis, 0), labelAt(axis, last));
-  if (fit.options.errors === "both" && found < last) throw refuseFilteredStart(from);
+  if (problemOf(fit).kind === "state-space" && found < last) throw refuseFilteredStart(from);
   return found;
 }
 
@@ -97,7 +97,7 @@ function projected(
       future: futures.flatMap((state) => state.paths ?? []),
       discarded: starts.discarded,
     },
-    passages: passagesOf(placedWatches(rule, options.watch), passagesFor(fit, mean, future)),
+    passages: passagesOf(placedWatches(rule, options.watch), passagesFor(fit, group, mean, future)),
     left,
     leftError: Math.sqrt((left * (1 - left)) / options.paths),
     ...(predictability && { predictability }),
@@ -150,7 +150,7 @@ function runBoth(
     limits: stateLimits(rule),
     streams,
   };
-  const { change, reading } = fittedNoise(fit, ground.group);
+  const { change, reading } = problemOf(fit).group(ground.group.group).noise;
   runEnsemble({ ...run, change: none, reading: none, onRow: mean.onRow, onProgress: half(0) });
   runEnsemble({
     ...run,
@@ -163,9 +163,10 @@ function runBoth(
   return { mean, future };
 }
 
-/** An answer about the process is read from the process: with reading errors, from the paths without them. */
-function passagesFor(fit: Fit, mean: Gatherer, future: Gatherer): readonly Float64Array[] {
-  return fit.options.errors === "observation" ? mean.passages : future.passages;
+/** An answer about the process is read from the process: with reading errors alone, from the paths without them. */
+function passagesFor(fit: Fit, { group }: GroupFit, mean: Gatherer, future: Gatherer): Gatherer["passages"] {
+  const { change } = problemOf(fit).group(group).noise;
+  return change.every((noise) => noise === undefined) ? mean.passages : future.passages;
 }
 
 function predicted(ground: FitGround, starts: DrawnStarts, firstError: number): Predictability | undefined {

@@ -16,7 +16,6 @@ export { type FitGround, fitGround } from "./fit-ground.js";
 export { type Forecast, forecast } from "./forecast.js";
 export type { ForecastOptions } from "./forecast-options.js";
 export type { Scenarios } from "./inputs/scenarios.js";
-export { fittedNoise } from "./noise/fitted-noise.js";
 export { type Noise, type NoiseDraw, noiseDraw } from "./noise/noise.js";
 export { ruleNoise } from "./noise/rule-noise.js";
 export { type DrawnStarts, drawnStarts, unknownsDraw } from "./parameters/drawn-starts.js";

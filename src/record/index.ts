@@ -26,6 +26,7 @@ export type { CalendarName } from "./period/calendar.js";
 export {
   indexOf,
   labelAt,
+  labelBetween,
   labelsAt,
   type PeriodAxis,
   periodsAfter,

@@ -42,7 +42,7 @@ export interface ObservedGroup {
   readonly name: string;
   /** Whole steps since the first row of the group, increasing; 0 at its first row. A gap stays a gap. */
   readonly index: Int32Array;
-  /** The period column as it was read, in `period.unit`; from the earliest row where it holds dates. */
+  /** The period column as it was read, in the unit of `axis`; from the earliest row where it holds dates. */
   readonly time: Float64Array;
   /** By state name: the values, finite. */
   readonly values: Readonly<Record<string, Float64Array>>;
@@ -76,14 +76,6 @@ export interface Observations {
   readonly flows?: readonly string[];
   /** The axis that all groups lie on; its origin is the earliest row of the record. */
   readonly axis: PeriodAxis;
-  /** The period column, its unit, and the length of one step in that unit. */
-  readonly period: {
-    readonly column: string;
-    readonly unit: string;
-    readonly step: StepLength;
-    /** The calendar's name, where one was chosen by name. */
-    readonly calendar?: string;
-  };
   /** Order of events inside a period, as the analyst stated it; "" when not stated. */
   readonly order: string;
   readonly findings: readonly Finding[];

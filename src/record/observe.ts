@@ -123,7 +123,6 @@ function assemble(
   log: FindingLog,
   { aside, read, used, corrections }: Counted,
 ): Observations {
-  const { step, name } = periods.calendar;
   const decisions = log.decisions();
   const corrected = new Set(decisions.map(({ row }) => row)).size;
   const settled = corrected - new Set(corrections.map(({ row }) => row)).size;
@@ -141,7 +140,6 @@ function assemble(
     inputs: columns.inputs.map(({ name }) => name),
     ...(flows.length > 0 && { flows }),
     axis: axisOfRecord(groups, periods),
-    period: { column: periods.column, unit: step.of, step, ...(name && { calendar: name }) },
     order: options.order ?? "",
     findings: log.all(),
     ...(decisions.length > 0 && { decisions }),

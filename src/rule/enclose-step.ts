@@ -4,13 +4,13 @@ import type { Operator } from "./graph/node.js";
 import type { Rule } from "./rule.js";
 import { intervalAlgebra, type StepArgumentsOver, stepOver } from "./step-over.js";
 
-/** Bounds on one step and its slope over a whole interval of the present value. */
+/** Enclosure of one step and its slope over an interval of the present value. */
 export interface StepEnclosure {
   readonly value: Interval;
   readonly slope: Interval;
 }
 
-/** Parameters and inputs by slot, inputs held at one value. */
+/** Parameters and inputs by slot; each input has one constant value. */
 export interface FixedValues {
   readonly parameters: Float64Array;
   readonly inputs: Float64Array;
@@ -18,10 +18,10 @@ export interface FixedValues {
 
 const exactly = (value: number): Interval => [value, value];
 
-/** Operations at which a value may jump, and whether an interval of results shows that it does there. */
+/** Operations with discontinuities. */
 const jumpOperators: readonly Operator[] = ["floor", "ceil", "round", "sign", "mod", "choose"];
 
-/** Intervals that note when a jump may lie inside: there no slope bounds the change of the value. */
+/** Interval arithmetic that reports when a discontinuity may lie inside: there the slope is unbounded. */
 function jumpDetectingAlgebra(note: () => void): Algebra<Interval> {
   const withDetection = (operator: Operator): Algebra<Interval>["operations"][Operator] => {
     const plain = intervalAlgebra.operations[operator];
@@ -41,10 +41,10 @@ function jumpDetectingAlgebra(note: () => void): Algebra<Interval> {
 const intersection = (a: Interval, b: Interval): Interval => [Math.max(a[0], b[0]), Math.min(a[1], b[1])];
 
 /**
- * For a rule of one state: a function that encloses the next value and its slope over an interval, past values
- * being the same as the present one. Every value that the step takes on the interval lies within `value`, and
- * every slope within `slope`, which is without bounds where the value may jump. The value is bounded both directly
- * and from the middle by the slope, which is closer on short intervals.
+ * For a rule of one state: a function that encloses the next value and its slope over an interval, lagged values
+ * being equal to the present one. Every value of the step on the interval lies within `value`, and every slope within
+ * `slope`, which is unbounded where the value may jump. The value is enclosed both directly and by the mean value
+ * form, which is tighter on short intervals.
  */
 export function encloseStep(rule: Rule, held: FixedValues): (present: Interval) => StepEnclosure {
   let jumps = false;

@@ -1,7 +1,8 @@
-import { ModelError, nearestNames } from "../numeric/index.js";
+import { didYouMean, ModelError, nearestNames } from "../numeric/index.js";
+import type { RuleFunction } from "./functions.js";
 import type { Span } from "./syntax/token.js";
 
-/** The line of the text that holds the place, with a caret under each of its letters. */
+/** The line of the text around a span, with a caret under each of its characters. */
 function excerptWithCarets(text: string, place: Span): string {
   const from = text.lastIndexOf("\n", place.start - 1) + 1;
   const lineEnd = text.indexOf("\n", from);
@@ -14,7 +15,7 @@ function excerptWithCarets(text: string, place: Span): string {
   return `    ${shown}\n    ${" ".repeat(before)}${"^".repeat(carets)}`;
 }
 
-/** A refusal that points into the rule's text: what was wrong, where, what to do. */
+/** An error that points into the rule's text: what is wrong, where, what to write instead. */
 export function ruleError(
   code: string,
   text: string,
@@ -31,10 +32,8 @@ export function ruleError(
 const nameList = (names: readonly string[]): string => (names.length === 0 ? "none" : names.join(", "));
 
 /** "Did you mean ...?" for the nearest of the known names, or nothing. */
-export function suggestion(name: string, known: readonly string[]): string {
-  const nearest = nearestNames(name, known);
-  return nearest.length === 0 ? "" : ` Did you mean "${nearest.join('" or "')}"?`;
-}
+export const suggestion = (name: string, known: readonly string[]): string =>
+  didYouMean(nearestNames(name, known));
 
 export function unknownNameError(
   text: string,
@@ -57,39 +56,38 @@ export function unknownNameError(
   );
 }
 
+export const misplacedChangeRemedy =
+  "Write the change as a line of its own, as in ΔN = r*N. For the last change, write N - N[t-1].";
+
 export function missingOperatorError(text: string, place: Span, left: string, right: string): ModelError {
   return ruleError(
     "implied-product",
     text,
     place,
-    `There is no sign between "${left}" and "${right}".`,
-    `A product needs its sign: write ${left}*${right}.`,
+    `An operator is missing between "${left}" and "${right}".`,
+    `For a product, write ${left}*${right}.`,
   );
 }
 
-export function unknownFunctionError(
+export function unknownFunctionError(text: string, place: Span, name: string, remedy: string): ModelError {
+  return ruleError("not-a-function", text, place, `"${name}" is not a function.`, remedy);
+}
+
+export function argumentCountError(
   text: string,
   place: Span,
-  name: string,
-  functions: readonly string[],
+  called: RuleFunction,
+  given: number,
 ): ModelError {
-  return ruleError(
-    "not-a-function",
-    text,
-    place,
-    `"${name}" is not a function, so "${name}(" has no meaning.`,
-    `For a product write ${name}*( ... ); for a past value write ${name}[t-1].${suggestion(name, functions)}`,
-  );
-}
-
-export function argumentCountError(text: string, place: Span, usage: string, given: number): ModelError {
-  const values = given === 1 ? "1 value" : `${given} values`;
+  const { name, minArgs, maxArgs, usage } = called;
+  const most = maxArgs - minArgs > 1 ? ` or more` : ` or ${maxArgs}`;
+  const wanted = `${minArgs}${minArgs === maxArgs ? "" : most} ${maxArgs === 1 ? "argument" : "arguments"}`;
   return ruleError(
     "wrong-arity",
     text,
     place,
-    `This call has ${values}, which does not fit ${usage}.`,
-    `Write it as ${usage}.`,
+    `"${name}" takes ${wanted}; ${given} ${given === 1 ? "was" : "were"} given.`,
+    `Write ${usage}.`,
   );
 }
 
@@ -104,7 +102,7 @@ export function tooLargeError(
     "rule-too-large",
     text,
     place,
-    `The rule has ${given} ${what}, more than the ${limit} that are read.`,
+    `The rule has ${given} ${what}; the limit is ${limit}.`,
     "Split it into several lines with named quantities, or into several rules.",
   );
 }

@@ -5,12 +5,12 @@ import { ruleDefinition } from "./rule-definition.js";
 import type { BinaryOperator, Expression } from "./syntax/expression.js";
 import type { Span } from "./syntax/token.js";
 
-/** The part of a rule at which a step first has no finite value, in words, with its place in the text. */
+/** Why a step has no finite value: the first part of the rule that fails, with its position in the text. */
 export interface StepFailure extends Span {
   readonly reason: string;
 }
 
-/** Where the step stands: arrays in the rule's order, the state vector with its kept past values. */
+/** Arguments of one step, in the order of the rule; the state vector includes its lags. */
 export interface StepArguments {
   readonly state: Float64Array;
   readonly parameters: Float64Array;
@@ -18,7 +18,7 @@ export interface StepArguments {
   readonly t: number;
 }
 
-/** Signals the first failing part to `explainFailure`; it never leaves this file. */
+/** Carries the first failing part to `explainFailure`; never leaves this file. */
 class FailureFound {
   readonly failure: StepFailure;
   constructor(failure: StepFailure) {
@@ -33,9 +33,12 @@ function reasonOf(at: Expression, result: number, values: readonly number[]): st
   if (at.kind === "binary" && at.operator === "/" && b === 0) {
     return `${expressionText(at)} divides ${sixDigits(a)} by zero`;
   }
-  const of = values.map(sixDigits).join(", ");
-  const text = at.kind === "call" ? `${at.name} of ${of}` : `${expressionText(at)}, with values ${of},`;
-  return Number.isNaN(result) ? `${text} has no value` : `${text} is larger than any computer number`;
+  const of = values.map(sixDigits);
+  const text =
+    at.kind === "call"
+      ? `${at.name}(${of.join(", ")})`
+      : `${expressionText(at)} with the values ${of.join(" and ")}`;
+  return Number.isNaN(result) ? `${text} is undefined` : `${text} is too large to represent`;
 }
 
 const comparisons: Partial<Record<BinaryOperator, (a: number, b: number) => boolean>> = {
@@ -66,13 +69,13 @@ function nameValue(at: Extract<Expression, { kind: "name" }>, valueOfName: Value
   const value = valueOfName(at.name, at.offset);
   if (Number.isFinite(value)) return value;
   throw new FailureFound({
-    reason: `${expressionText(at)} has no finite value`,
+    reason: `${expressionText(at)} is not a finite number`,
     start: at.start,
     end: at.end,
   });
 }
 
-/** Whether a condition holds; the second part is looked at only where it decides. */
+/** Whether a condition is true; the second operand is evaluated only when it decides. */
 function isTrue(at: Expression, valueOfName: ValueOfName): boolean {
   if (at.kind === "unary") return !isTrue(at.operand, valueOfName);
   if (at.kind !== "binary") return false;
@@ -121,7 +124,7 @@ function valuesAt(rule: Rule, place: StepArguments, quantities: ReadonlyMap<stri
   };
 }
 
-/** Finds why a step from a place has no finite value; undefined when it has one. */
+/** Finds why a step has no finite value; undefined when it has one. */
 export function explainFailure(rule: Rule, place: StepArguments): StepFailure | undefined {
   const quantities = new Map<string, number>();
   const valueOfName = valuesAt(rule, place, quantities);

@@ -14,7 +14,7 @@ function precedenceOf(at: Expression): number {
   return atomPrecedence;
 }
 
-/** Powers and products close up around their signs, sums and comparisons stand apart. */
+/** No spaces around powers and products, spaces around sums and comparisons. */
 const spaced = (operator: string): string =>
   operator === "*" || operator === "/" || operator === "^" ? operator : ` ${operator} `;
 
@@ -23,7 +23,7 @@ function grouped(at: Expression, minPrecedence: number): string {
   return precedenceOf(at) < minPrecedence ? `(${source})` : source;
 }
 
-/** Canonical text of one expression, with no bracket that the order of operations makes needless. */
+/** Canonical text of one expression, without redundant brackets. */
 export function expressionText(at: Expression): string {
   switch (at.kind) {
     case "number":
@@ -47,6 +47,6 @@ export function expressionText(at: Expression): string {
   }
 }
 
-/** A sign in front of a right-hand value is bracketed for the reader: a*(-b), although a*-b reads the same. */
+/** A signed right operand is bracketed for the reader: a*(-b), although a*-b means the same. */
 const groupedRight = (at: Expression, minPrecedence: number): string =>
   at.kind === "unary" ? `(${expressionText(at)})` : grouped(at, minPrecedence);

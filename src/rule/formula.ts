@@ -5,12 +5,12 @@ import { ruleDefinition } from "./rule-definition.js";
 import { texExpression } from "./tex/tex-expression.js";
 import { texName } from "./tex/tex-name.js";
 
-/** An expression of the rule language by itself. */
+/** A single expression of the rule language. */
 export interface Formula {
   readonly text: string;
   readonly names: readonly string[];
   readonly tex: string;
-  /** Its value for given names; t where the formula reads it. */
+  /** Its value for given names, and for t where the formula reads it. */
   readonly at: (values: Readonly<Record<string, number>>, t?: number) => number;
 }
 
@@ -42,7 +42,7 @@ export function formula(text: string, kind: "number" | "condition" = "number"): 
   const key = `${kind}:${text}`;
   let found = cache.get(key);
   if (found === undefined) {
-    // The name of the value is one that no formula uses.
+    // No formula uses this name.
     const body = kind === "number" ? text : `if(${text}, 1, 0)`;
     found = formulaOf(makeRule(`value_of_formula[t+1] = ${body}`, {}), text);
     cache.set(key, found);

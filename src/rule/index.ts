@@ -1,5 +1,6 @@
 export type { NamedClosedForm, NamedEquilibrium, NamedQuantity, NamedRule } from "./catalogue/named-rule.js";
 export { type RuleCatalogue, rules } from "./catalogue/rules.js";
+export { shortNames } from "./catalogue/short-names.js";
 export { compileRule, interpretRule } from "./code/compile-rule.js";
 export type { CompiledRule, PathSums, StepSums } from "./compiled-rule.js";
 export { encloseStep, type FixedValues, type StepEnclosure } from "./enclose-step.js";
@@ -28,3 +29,4 @@ export {
   stepOver,
 } from "./step-over.js";
 export { ruleTex } from "./tex/rule-tex.js";
+export { unitClash } from "./units/unit-clash.js";

@@ -11,9 +11,9 @@ import { defineRule, storeDefinition } from "./rule-definition.js";
 import { unitFindings } from "./units/unit-findings.js";
 
 /**
- * Reads, checks and keeps a rule; `named` is what the catalogue knows of it.
+ * Reads and checks a rule; `named` is its catalogue entry.
  *
- * What is kept of the options is a copy: a rule must not change when the caller's objects do.
+ * The options are copied: a rule must not change when the caller's objects do.
  */
 export function makeRule(text: string, options: RecurrenceOptions, named?: NamedRule): Rule {
   const normal = text.normalize("NFC").replace(/\r\n?/gu, "\n");

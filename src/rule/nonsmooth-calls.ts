@@ -4,16 +4,16 @@ import { ruleDefinition } from "./rule-definition.js";
 import type { Expression } from "./syntax/expression.js";
 import type { Span } from "./syntax/token.js";
 
-/** A function in a rule at which a step is not smooth, with its place in the text. */
+/** A function call at which a step is not smooth, with its position in the text. */
 export interface NonsmoothCall extends Span {
   readonly function: string;
 }
 
-/** Where a step bends or jumps as states or parameters move. */
+/** Where a step has kinks or jumps as states or parameters vary. */
 export interface NonsmoothCalls {
-  /** min, max, abs, if: the slope changes at once; derivatives there are one-sided. */
+  /** min, max, abs, if: the slope changes abruptly; derivatives there are one-sided. */
   readonly kinks: readonly NonsmoothCall[];
-  /** floor, ceil, round, sign, mod: the value changes at once; no slope tells a fit where to go. */
+  /** floor, ceil, round, sign, mod: the value changes abruptly; slopes do not guide a fit. */
   readonly jumps: readonly NonsmoothCall[];
 }
 
@@ -27,8 +27,8 @@ function callsIn(at: Expression): readonly Extract<Expression, { kind: "call" }>
 }
 
 /**
- * Lists the functions at which a step of the rule bends or jumps. Those that work on inputs and t alone are left
- * out: nothing that a fit moves reaches them.
+ * Lists the function calls at which a step of the rule has a kink or a jump. Calls that depend on inputs and t alone
+ * are left out: no fit varies them.
  *
  * @example roughness(recurrence("N[t+1] = max(N - c, 0)")).kinks[0].function; // "max"
  */

@@ -3,7 +3,7 @@ import type { StepArguments } from "./explain-failure.js";
 import type { Rule } from "./rule.js";
 import { ruleDefinition } from "./rule-definition.js";
 
-/** A function that gives the rule's quantities, in order, in the step from a place. */
+/** A function that evaluates the quantities of the rule, in order, for the arguments of a step. */
 export function quantitiesAt(rule: Rule): (place: StepArguments) => readonly number[] {
   const { quantities } = ruleDefinition(rule).graph;
   const evaluate = graphEvaluator(quantities);

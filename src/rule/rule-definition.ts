@@ -5,7 +5,7 @@ import type { RuleGraph } from "./graph/rule-graph.js";
 import type { Rule } from "./rule.js";
 import { parseRule } from "./syntax/parse-rule.js";
 
-/** What stands behind a rule: its checked lines and its expression graph. */
+/** The checked lines and the expression graph of a rule. */
 export interface RuleDefinition {
   readonly checked: CheckedRule;
   readonly graph: RuleGraph;
@@ -19,7 +19,7 @@ export function defineRule(text: string, declared: Declarations): RuleDefinition
   return { checked, graph: buildGraph(checked) };
 }
 
-/** Keeps the definition beside the rule, so that the rule itself stays a plain object. */
+/** Stores the definition beside the rule, so that the rule itself stays a plain object. */
 export const storeDefinition = (rule: Rule, definition: RuleDefinition): void => {
   cache.set(rule, definition);
 };

@@ -7,7 +7,7 @@ import { stepJacobian } from "./graph/step-jacobian.js";
 import type { Rule } from "./rule.js";
 import { ruleDefinition } from "./rule-definition.js";
 
-/** Values that a step reads, in some algebra; each role by slot. */
+/** Arguments of a step in some algebra; each role by slot. */
 export interface StepArgumentsOver<T> {
   readonly state: readonly T[];
   readonly parameters: readonly T[];
@@ -20,11 +20,11 @@ export interface StepArgumentsOver<T> {
 export interface StepOver<T> {
   /** The next state vector. */
   readonly next: (place: StepArgumentsOver<T>) => readonly T[];
-  /** Its slopes [slot][slot] by the present one. */
+  /** Its Jacobian [slot][slot] by the present one. */
   readonly slopes: (place: StepArgumentsOver<T>) => readonly (readonly T[])[];
 }
 
-/** Makes a rule ready to be stepped in another algebra. */
+/** Compiles a rule for another algebra. */
 export function stepOver<T>(rule: Rule, algebra: Algebra<T>): StepOver<T> {
   const { graph } = ruleDefinition(rule);
   const width = graph.states;
@@ -46,7 +46,7 @@ export function stepOver<T>(rule: Rule, algebra: Algebra<T>): StepOver<T> {
   };
 }
 
-/** Intervals as numbers: every result holds what the exact one could be. */
+/** Interval arithmetic: every result contains the exact one. */
 export const intervalAlgebra: Algebra<Interval> = {
   number: (value) => (Number.isInteger(value) ? [value, value] : roundOutward(value, value)),
   operations: intervalOperations,

@@ -214,7 +214,6 @@ function recordOf(
     states: [{ name, column: name, unit: "", measured: "level" }],
     axis: group.axis,
     inputs: [],
-    period: { column: "t", unit: "", step: { every: 1, of: "period" } },
     order: "",
     findings: [],
     counts,

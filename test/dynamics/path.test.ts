@@ -18,7 +18,7 @@ test("a path that leaves the finite range ends before it, with the period and th
     {
       "kind": "left-finite-range",
       "period": 3,
-      "reason": "The rule leaves the finite range at period 3: log of -3.31656 has no value.",
+      "reason": "The rule leaves the finite range at period 3: log(-3.31656) is undefined.",
     }
   `);
 });
@@ -53,7 +53,7 @@ test("a named rule is not run outside its range", () => {
   expect(() =>
     trajectory(rules.logistic(), { parameters: { r: 2.5, K: 100 }, initial: { N: 150 }, periods: 3 }),
   ).toThrowErrorMatchingInlineSnapshot(
-    `[ModelError: Quadratic rule (discrete logistic) means what it says only where N0 >= 0 and N0 <= K*(1 + 1/r); given were N0 = 150, K = 100, r = 2.5. Choose values inside the range, or write the rule out with recurrence to run it regardless.]`,
+    `[ModelError: Discrete logistic (quadratic map) means what it says only where N0 >= 0 and N0 <= K*(1 + 1/r); given were N0 = 150, K = 100, r = 2.5. Choose values inside the range, or write the rule out with recurrence to run it regardless.]`,
   );
 });
 

@@ -24,7 +24,6 @@ export function record(
     })),
     axis: groups[0]!.axis,
     inputs: inputNames,
-    period: { column: "t", unit: "week", step: { every: 1, of: "week" } },
     order: "",
     findings: [],
     counts: { read, used: read, flagged: 0, corrected: 0, refused: 0 },
@@ -60,5 +59,14 @@ function groupOf(
 /** Weeks by number, from a first one on. */
 export function numbered(origin: number): PeriodAxis {
   const step = { every: 1, of: "week" };
-  return { column: "t", unit: "week", step, form: "number", counts: "numbers", origin, stride: 1 };
+  return {
+    kind: "period-axis",
+    column: "t",
+    unit: "week",
+    step,
+    form: "number",
+    counts: "numbers",
+    origin,
+    stride: 1,
+  };
 }

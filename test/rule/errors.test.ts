@@ -23,222 +23,259 @@ test("an unknown name is refused with its place and the nearest names", () => {
 
 test("a product without its sign is refused with the sign shown", () => {
   expect(message("ΔN = r N")).toMatchInlineSnapshot(`
-    "There is no sign between "r" and "N".
+    "An operator is missing between "r" and "N".
         ΔN = r N
               ^^
-    A product needs its sign: write r*N."
+    For a product, write r*N."
   `);
   expect(message("ΔN = 2N")).toMatchInlineSnapshot(`
-    "There is no sign between "2" and "N".
+    "An operator is missing between "2" and "N".
         ΔN = 2N
               ^
-    A product needs its sign: write 2*N."
+    For a product, write 2*N."
   `);
   expect(message("ΔN = r*N(1 - N/K)")).toMatchInlineSnapshot(`
-    ""N" is not a function, so "N(" has no meaning.
+    ""N" is not a function.
         ΔN = r*N(1 - N/K)
                ^^
-    For a product write N*( ... ); for a past value write N[t-1]."
+    For a product, write N*( ... )."
   `);
   expect(message("ΔN = (r + 1)(N - 1)")).toMatchInlineSnapshot(`
-    "There is no sign between "(r + 1)" and "( ... )".
+    "An operator is missing between "(r + 1)" and "( ... )".
         ΔN = (r + 1)(N - 1)
                     ^
-    A product needs its sign: write (r + 1)*( ... )."
+    For a product, write (r + 1)*( ... )."
   `);
+});
+
+// The notations are those of textbooks and other languages (common practice, no source).
+test.each([
+  ["N[t+1] = ln(N)", "For the natural logarithm, write log(x)."],
+  ["N[t+1] = pow(N, 2)", "For a power, write x^y."],
+  ["N[t+1] = ifelse(N > 1, 1, N)", "Write if(condition, a, b)."],
+  ["N[t+1] = R*N(t)", "Periods go in square brackets: write N[t]."],
+  ["N[t+1] = R*N(t - 1)", "Periods go in square brackets: write N[t-1]."],
+  ["N(t+1) = R*N(t)", "Periods go in square brackets: write N[t+1] = ..."],
+  ["dN/dt = r*N", "For the change per period, write ΔN = ..."],
+  ["# growth\n  dowed / dt = r*owed", "For the change per period, write Δowed = ..."],
+  ["N_{t+1} = R*N", "Periods go in square brackets: write N[t+1]."],
+  ["N[t+1] = R*N_{t}", "Periods go in square brackets: write N[t]."],
+  ["N[t+1] = R*N*(1 - N/N_{max})", "Write N_max."],
+  ["N_t+1 = R*N", "For the next value, write N[t+1] = ..."],
+  ["N[t+1] = R*N_t", "For the present value, write N or N[t]."],
+  ["N[t+1] = N**2", "For a power, write ^, as in N^2."],
+  ["N[t+1] = 2N", "For a product, write 2*N."],
+  ["N[t+1] = 2x", "For a product, write 2*x."],
+])("%s is answered with what to write instead", (text, remedy) => {
+  expect(message(text).split("\n").at(-1)).toBe(remedy);
+});
+
+test("what the hints say to write is read", () => {
+  const rules = [
+    "N[t+1] = log(N)",
+    "N[t+1] = N^2",
+    "N[t+1] = if(N > 1, 1, N)",
+    "N[t+1] = R*N[t]",
+    "N[t+1] = R*N[t-1]",
+    "ΔN = r*N",
+    "N[t+1] = R*N*(1 - N/N_max)",
+    "N[t+1] = 2*N",
+  ];
+  expect(rules.map((text) => message(text))).toEqual(rules.map(() => ""));
+  expect(message("N[t+1] = R*N_t", { parameters: ["R", "N_t"] })).toBe("");
 });
 
 test("a mistyped function is refused with the nearest ones", () => {
   expect(message("N[t+1] = N*epx(r)")).toMatchInlineSnapshot(`
-    ""epx" is not a function, so "epx(" has no meaning.
+    ""epx" is not a function.
         N[t+1] = N*epx(r)
                    ^^^^
-    For a product write epx*( ... ); for a past value write epx[t-1]. Did you mean "exp"?"
+    For a product, write epx*( ... ). Did you mean "exp"?"
   `);
 });
 
 test("a wrong number of values is refused with the way to write the call", () => {
   expect(message("N[t+1] = max(N)")).toMatchInlineSnapshot(`
-    "This call has 1 value, which does not fit max(a, b, ...).
+    ""max" takes 2 or more arguments; 1 was given.
         N[t+1] = max(N)
                  ^^^^^^
-    Write it as max(a, b, ...)."
+    Write max(a, b, ...)."
   `);
   expect(message("N[t+1] = exp()")).toMatchInlineSnapshot(`
-    "This call has 0 values, which does not fit exp(x).
+    ""exp" takes 1 argument; 0 were given.
         N[t+1] = exp()
                  ^^^^^
-    Write it as exp(x)."
+    Write exp(x)."
   `);
 });
 
 test("a value of the future is refused, except the next row's input", () => {
   expect(message("N[t+1] = N[t+1] + 1")).toMatchInlineSnapshot(`
-    ""N[t+1]" is a value of the future on the right of a line.
+    ""N[t+1]" is a future value, and cannot be read on the right-hand side.
         N[t+1] = N[t+1] + 1
                  ^^^^^^
-    Only inputs may be read at [t+1]. Name the part that both lines share as a quantity above them."
+    Only inputs can be read at [t+1]. Define the shared part as a quantity on a line above, and use it in both lines."
   `);
   expect(message("owed[t+1] = owed - paid[t+2]", { inputs: ["paid"] })).toMatchInlineSnapshot(`
-    ""paid[t+2]" lies beyond the period that the step leads to.
+    ""paid[t+2]" is beyond the next period.
         owed[t+1] = owed - paid[t+2]
                            ^^^^^^^^^
-    An input may be read up to paid[t+1]."
+    Inputs can be read up to paid[t+1]."
   `);
   expect(message("owed[t+1] = owed - paid[t+1]", { inputs: ["paid"] })).toBe("");
   expect(message("owed[t+1] = owed - paid[t+1]")).toMatchInlineSnapshot(`
-    ""paid" is a parameter and has no value of its own in other periods.
+    ""paid" is a parameter, which has one value for all periods.
         owed[t+1] = owed - paid[t+1]
                            ^^^^^^^^^
-    If it is recorded by period, declare it: { inputs: ["paid"] }."
+    If paid is recorded by period, declare it as an input: { inputs: ["paid"] }."
   `);
 });
 
 test("quantities that need each other are refused", () => {
   expect(message("a = b + 1\nb = a + 1\nN[t+1] = a")).toMatchInlineSnapshot(`
-    ""b" is read here and set only on line 2; quantities are worked out from the top down.
+    ""b" is used here but defined on line 2; lines are evaluated from top to bottom.
         a = b + 1
             ^
-    Move its line above this one; where two lines need each other, write one of them out."
+    Move line 2 above this one. If the two lines depend on each other, write one expression into the other."
   `);
   expect(message("a = a + 1\nN[t+1] = a")).toMatchInlineSnapshot(`
-    ""a" is set from itself.
+    ""a" is defined by itself.
         a = a + 1
             ^
-    Write the next value as a[t+1] = ... or give the quantity another name."
+    For the next value, write a[t+1] = ...; otherwise give the quantity another name."
   `);
 });
 
 test("chained comparisons and sorts that do not fit are refused", () => {
   expect(message("N[t+1] = if(0 < N < K, N, K)")).toMatchInlineSnapshot(`
-    "A comparison joins two values, and this is a third.
+    "Comparisons cannot be chained.
         N[t+1] = if(0 < N < K, N, K)
                           ^
     Join two comparisons with and, as in 0 < N and N < K."
   `);
   expect(message("N[t+1] = N*(N > 3)")).toMatchInlineSnapshot(`
-    "This is a condition, yes or no, where a number is needed.
+    "This is a condition, but a number is needed here.
         N[t+1] = N*(N > 3)
                    ^^^^^^^
-    Turn it into a number with if(condition, 1, 0)."
+    To use a condition as a number, write if(condition, 1, 0)."
   `);
   expect(message("N[t+1] = if(N, 1, 2)")).toMatchInlineSnapshot(`
-    "This is a number where a condition, yes or no, is needed.
+    "This is a number, but a condition is needed here.
         N[t+1] = if(N, 1, 2)
                     ^
-    Compare it with something, as in N > 0."
+    Compare the number with another one, as in N > 0."
   `);
 });
 
 test("numbers of mathematics are not taken for granted", () => {
   expect(message("N[t+1] = N*e^r")).toMatchInlineSnapshot(`
-    ""e" is not taken for a number of mathematics.
+    ""e" is not predefined.
         N[t+1] = N*e^r
                    ^
-    Write exp(1), or declare it as a parameter of your own: { parameters: ["e", ...] }."
+    For e^x, write exp(x). To use e as a parameter, declare it: { parameters: ["e", ...] }."
   `);
   expect(message("N[t+1] = N*e", { parameters: ["e"] })).toBe("");
 });
 
 test("signs of other notations are refused with ours", () => {
   expect(message("N[t+1] = N**2")).toMatchInlineSnapshot(`
-    "The sign "**" has no meaning in a rule.
+    ""**" is not part of the rule language.
         N[t+1] = N**2
                   ^^
-    Write a power with ^, as in N^2."
+    For a power, write ^, as in N^2."
   `);
   expect(message("N' = r*N")).toMatchInlineSnapshot(`
-    "The sign "'" has no meaning in a rule.
+    ""'" is not part of the rule language.
         N' = r*N
          ^
-    Write the next value as N[t+1]."
+    For the next value, write N[t+1]; for the change, ΔN."
   `);
   expect(message("N[t+1] = 5%*N")).toMatchInlineSnapshot(`
-    "The sign "%" has no meaning in a rule.
+    ""%" is not part of the rule language.
         N[t+1] = 5%*N
                   ^
-    Write the number as a fraction, as in 5/100, or use mod(x, m)."
+    For 5%, write 5/100; for a remainder, mod(x, m)."
   `);
   expect(message("N[n+1] = r*N")).toMatchInlineSnapshot(`
-    "The period of "N" must be counted from t.
+    "The index of "N" must be t, t+1, t-1 and so on.
         N[n+1] = r*N
          ^^
-    Write the present value as N or N[t], a past one as N[t-1], N[t-2], the next as N[t+1]."
+    Write N or N[t] for the present value, N[t-1] or N[t-2] for a past one, and N[t+1] for the next."
   `);
   expect(message("N[t+1] = 0,5*N")).toMatchInlineSnapshot(`
-    "The sign "," joins nothing here.
+    ""," is not expected here.
         N[t+1] = 0,5*N
                   ^
-    Write decimals with a point, as in 0.5."
+    Use a decimal point, as in 0.5."
   `);
 });
 
 test("lines that set nothing, or the same thing twice, are refused", () => {
   expect(message("r*N*(1 - N/K)")).toMatchInlineSnapshot(`
-    "The line does not say what it sets.
+    "This line does not set anything.
         r*N*(1 - N/K)
         ^
-    A line sets a next value, N[t+1] = ..., a change, ΔN = ..., or a named quantity, paid = ..."
+    Each line sets the next value of a state (N[t+1] = ...), its change (ΔN = ...) or a quantity within the period (paid = ...)."
   `);
   expect(message("")).toMatchInlineSnapshot(`
-    "The rule has no line.
+    "The rule is empty.
         
         ^
-    A line sets a next value, N[t+1] = ..., a change, ΔN = ..., or a named quantity, paid = ..."
+    Each line sets the next value of a state (N[t+1] = ...), its change (ΔN = ...) or a quantity within the period (paid = ...)."
   `);
   expect(message("q = r*2")).toMatchInlineSnapshot(`
-    "No line of the rule says how a value changes from one period to the next.
+    "No line sets the next value of a state.
         q = r*2
         ^^^^^^^
-    Write one line as N[t+1] = ... or ΔN = ..."
+    Add a line such as N[t+1] = ... or ΔN = ..."
   `);
   expect(message("N[t+1] = 2\nΔN = 3")).toMatchInlineSnapshot(`
-    ""N" is set twice.
+    ""N" is set by two lines.
         ΔN = 3
          ^
-    Keep one of the lines, or give the other another name."
+    Remove one of the lines, or use another name in it."
   `);
   expect(message("N[t] = 2")).toMatchInlineSnapshot(`
-    "A line can set the next value of "N" only, at [t+1].
+    "A line can only set the next value of "N".
         N[t] = 2
         ^^^^
-    A line sets a next value, N[t+1] = ..., a change, ΔN = ..., or a named quantity, paid = ..."
+    Write N[t+1] = ..."
   `);
   expect(message("N[t+1] = 2*ΔN")).toMatchInlineSnapshot(`
-    "The change sign stands inside an expression.
+    "Δ can only start a line.
         N[t+1] = 2*ΔN
                    ^
-    A change may only begin a line, as in ΔN = r*N. Use N - N[t-1] for the last change."
+    Write the change as a line of its own, as in ΔN = r*N. For the last change, write N - N[t-1]."
   `);
 });
 
 test("texts beyond the limits of length, depth and parts are refused at once", () => {
   expect(message(`N[t+1] = ${"N + ".repeat(6000)}N`).split("\n")[0]).toMatchInlineSnapshot(
-    `"The rule has 24010 letters, more than the 20000 that are read."`,
+    `"The rule has 24010 characters; the limit is 20000."`,
   );
   expect(message(`N[t+1] = ${"(".repeat(500)}N${")".repeat(500)}`).split("\n")[0]).toMatchInlineSnapshot(
-    `"The rule has 101 levels of nesting, more than the 100 that are read."`,
+    `"The rule has 101 levels of nesting; the limit is 100."`,
   );
   expect(message(`N[t+1] = ${"N+".repeat(3000)}N`).split("\n")[0]).toMatchInlineSnapshot(
-    `"The rule has 5001 parts, more than the 5000 that are read."`,
+    `"The rule has 5001 terms and operators; the limit is 5000."`,
   );
   expect(message(`N[t+1] = ${"-".repeat(500)}N`).split("\n")[0]).toMatchInlineSnapshot(
-    `"The rule has 101 levels of nesting, more than the 100 that are read."`,
+    `"The rule has 101 levels of nesting; the limit is 100."`,
   );
   expect(message(`N[t+1] = ${"2^".repeat(500)}N`).split("\n")[0]).toMatchInlineSnapshot(
-    `"The rule has 101 levels of nesting, more than the 100 that are read."`,
+    `"The rule has 101 levels of nesting; the limit is 100."`,
   );
 });
 
 test("options that speak of other names or give no number are refused", () => {
   expect(message("N[t+1] = R*N", { start: { r: 1 } })).toMatchInlineSnapshot(
-    `"The option start speaks of "r", which is no parameter of the rule. Known: R. Did you mean "R"?"`,
+    `"Option \`start\`: the rule has no parameter "r". It has R. Did you mean "R"?"`,
   );
   expect(message("N[t+1] = R*N", { bounds: { R: [2, 1] } })).toMatchInlineSnapshot(
-    `"The option bounds gives [2,1] for "R". Give two numbers, lowest first, as in [0, Infinity]."`,
+    `"Option \`bounds\`: "R" was given as [2,1]. Give two numbers, the lower one first, as in [0, Infinity]."`,
   );
   expect(message("N[t+1] = R*N + N[t-2]", { initial: { N: 3 } })).toMatchInlineSnapshot(
-    `"The option initial gives 3 for "N". Give 3 numbers, oldest first, because the rule reads N[t-2]."`,
+    `"Option \`initial\`: "N" was given as 3. Give 3 numbers, oldest first, because the rule reads N[t-2]."`,
   );
 });
 
@@ -246,8 +283,8 @@ test("names one letter apart and names never used are findings, not refusals", (
   const rule = recurrence("ΔN = growth*N*(1 - N/capacity) - grovth*N", { inputs: ["rain"] });
   expect(rule.findings.map(({ code, message }) => `${code}: ${message}`)).toMatchInlineSnapshot(`
     [
-      "names-look-alike: "growth" and "grovth" differ by one letter; they are read as two names. If one is a slip, correct it; declare { parameters: [...] } to have every other name refused.",
-      "declared-but-unused: "rain" is declared and stands nowhere in the rule. Take it out, or look for a slip in the text.",
+      "names-look-alike: "growth" and "grovth" differ by one letter and are treated as two names. If one is a typo, correct it. To reject undeclared names, list the parameters: { parameters: [...] }.",
+      "declared-but-unused: "rain" is declared but not used in the rule. Remove it, or check the text for a typo.",
     ]
   `);
 });

@@ -1,4 +1,4 @@
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import type { Rule } from "../../rule/index.js";
 import { isProbability, type Measure, measureWords } from "../measure/measure.js";
 import { measureReader } from "../measure/read-measure.js";
@@ -16,7 +16,7 @@ import { settingMargin } from "../setting/setting-margin.js";
 import { withUnplanned } from "../setting/setting-range.js";
 import { isFit, type Standing, standingOf } from "../setting/standing.js";
 import { opened } from "../words/amount.js";
-import type { Solution, Solved, SolveOptions, Target } from "./solution.js";
+import type { DatedTarget, Solution, Solved, SolveOptions, Target } from "./solution.js";
 import { pastAlready, signNotes } from "./solve-notes.js";
 import { solveSentence } from "./solve-sentence.js";
 import { type Roots, solveWithin } from "./solve-within.js";
@@ -38,10 +38,11 @@ import { type Roots, solveWithin } from "./solve-within.js";
  * asked.solutions[0].value // 1000*0.01/(1 - 1.01**-12)
  */
 export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
-  const { vary: unknown, until, level = 0.95 } = options;
-  const aim = aimOf(until);
+  const { vary: unknown, level = 0.95 } = options;
   const setting = rangeable(subject, options);
   const standing = standingOf(subject, withUnplanned(subject, options, unknown, setting.between));
+  const until = numericTarget(options.until, standing);
+  const aim = aimOf(until);
   const found = settingOf(standing, unknown);
   const reader = readerOf(standing, until, found);
   const tolerance = options.multiple === undefined ? 0 : 0.01 * options.multiple;
@@ -87,7 +88,7 @@ function rangeable(
   if (between === undefined) return {};
   const [from, to] = between;
   const own = isFit(subject) ? subject.rule : subject;
-  const bounds = (isFit(subject) ? subject.options.bounds?.[unknown] : undefined) ?? own.bounds[unknown];
+  const bounds = isFit(subject) ? problemOf(subject).bounds(unknown) : own.bounds[unknown];
   if (!(from < to)) throw refuseBounds(unknown, from, to, "the first must be the smaller one");
   if (bounds !== undefined && (to < bounds[0] || from > bounds[1]))
     throw refuseBounds(unknown, from, to, `the rule admits ${bounds[0]} to ${bounds[1]}`);
@@ -95,6 +96,13 @@ function rangeable(
 }
 
 /** The value asked for; of a probability between 0 and 1. */
+/** A target whose label of a period is replaced by the time that measures are in. */
+function numericTarget(target: Target | DatedTarget, { timeOf }: Standing): Target {
+  const key = (["is", "atMost", "atLeast"] as const).find((each) => typeof target[each] === "string");
+  // Of the keys of a target only one is set.
+  return key === undefined ? (target as Target) : ({ ...target, [key]: timeOf(target[key]!) } as Target);
+}
+
 function aimOf(target: Target): number {
   const aim = target.is ?? target.atMost ?? target.atLeast;
   if (aim === undefined || !Number.isFinite(aim)) throw refuseNoTarget(aim);

@@ -35,8 +35,7 @@ export function signNotes(
   if (fitGround === undefined || fit === undefined) return [];
   const ground = { ...fitGround, ...setting.at(value) };
   const last = lastRead(standing, measure, achieved);
-  const { unit } = fit.observations.period;
-  const period = (row: number): string => `${unit} ${plain(standing.timeAt(row), 6)}`;
+  const period = (row: number): string => standing.timeWords(standing.timeAt(row));
   const central = centralPath(ground);
   const scenario = `${setting.name} ${plain(value, 4)}`;
   return recordedSignWarnings({ central, ground, scenario, period, last }).map(({ message }) => message);

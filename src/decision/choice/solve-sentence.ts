@@ -23,7 +23,7 @@ export function solveSentence(answer: Question, standing: Standing): string {
 /** A time that is to come no earlier than asked is said by the limit, as it may lie beyond the projection. */
 function broughtWords(target: Target, { achieved, achievedError }: Solution, standing: Standing): string {
   if ("time" in target && target.atLeast !== undefined)
-    return `${reachWords(target.time, target, standing)} not before ${standing.periodUnit} ${plain(target.atLeast, 5)}`;
+    return `${reachWords(target.time, target, standing)} not before ${standing.timeWords(target.atLeast)}`;
   return measuredClause(target, achieved, achievedError, standing);
 }
 

@@ -60,6 +60,8 @@ export const isProbability = (measure: Measure): measure is Extract<Measure, { p
 export interface MeasureUnits {
   readonly unitOf: (name: string) => string;
   readonly periodUnit: string;
+  /** A time of the period column: "month 120", or a label where periods have them. */
+  readonly timeWords: (time: number) => string;
 }
 
 /** A measure in words: "the average of stock over the next 26 weeks". */
@@ -102,6 +104,6 @@ export function measuredClause(measure: Measure, value: number, error: number, u
 export function measuredWords(measure: Measure, value: number, error: number, units: MeasureUnits): string {
   if (isProbability(measure)) return value === 0 ? "none in the draws made" : percent(value, error);
   const { kind, name } = measureOf(measure);
-  if (kind === "time") return `${units.periodUnit} ${plain(value, 5)}`;
+  if (kind === "time") return units.timeWords(value);
   return amount(plain(value, 5), units.unitOf(name));
 }

@@ -1,4 +1,4 @@
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import { quantile } from "../../numeric/index.js";
 import {
   type Forecast,
@@ -99,7 +99,7 @@ function recordedPast(
   const { value, sign } = levelSide(question);
   const at = values[state]!.findIndex((each) => sign * (each - value) >= 0);
   // A record that reads the state through an unknown factor is on another scale.
-  if (at <= 0 || fit.options.factor?.[state] !== undefined) return undefined;
+  if (at <= 0 || problemOf(fit).readByFactor.includes(state)) return undefined;
   return { time: time[at]!, words: labels?.[at] ?? `${periodUnit} ${plain(time[at]!, 6)}` };
 }
 
@@ -112,7 +112,7 @@ function meanPath(
   if (ahead.kind === "simulation") return undefined;
   const { fit, options } = ahead;
   const fitted = fit.groups.find((each) => each.group === group.group)!;
-  const ground = fitGround(fit, fitted, options.periods, group.plans);
+  const ground = fitGround(fit, fitted, options.periods, group.plans, group.recordEnd);
   const place = fit.rule.states.indexOf(question.state);
   return deltaMargin(fit, ground, question.level, ({ values }) => {
     const path = values[place]!;

@@ -1,3 +1,4 @@
+import { problemOf } from "../../estimate/index.js";
 import { crossedLevel, type Forecast, levelSide, type Simulation } from "../../projection/index.js";
 import { nonsmoothCalls, type Rule, ruleLabel } from "../../rule/index.js";
 import { refuseFewUnits, refuseLevel, refuseStateUnknown, refuseTarget } from "../refusals.js";
@@ -56,7 +57,7 @@ function questionOf(ahead: Forecast | Simulation, rule: Rule, options: TimeToRea
   if (!rule.states.includes(state)) throw refuseStateUnknown(state, rule.states);
   if (!Number.isFinite(value)) throw refuseTarget(value);
   if (!(level > 0 && level < 1)) throw refuseLevel(level);
-  const period = ahead.kind === "forecast" ? ahead.fit.observations.period.unit : ahead.options.period;
+  const period = ahead.kind === "forecast" ? ahead.fit.observations.axis.unit : ahead.options.period;
   return {
     rule: ruleLabel(rule),
     state,
@@ -70,5 +71,6 @@ function questionOf(ahead: Forecast | Simulation, rule: Rule, options: TimeToRea
 
 function marginOf(ahead: Forecast | Simulation): TimeToReach["margin"] {
   if (ahead.kind === "simulation") return "random change";
-  return ahead.fit.options.errors === "observation" ? "parameters" : "parameters and process errors";
+  const { change } = problemOf(ahead.fit).group(ahead.groups[0]!.group).noise;
+  return change.every((noise) => noise === undefined) ? "parameters" : "parameters and process errors";
 }

@@ -1,4 +1,5 @@
 import type { InputPlan } from "../../dynamics/index.js";
+import { problemOf } from "../../estimate/index.js";
 import type { Ground } from "../../projection/index.js";
 import { type Standing, stateOf } from "./standing.js";
 
@@ -21,7 +22,7 @@ const open: readonly [number, number] = [Number.NEGATIVE_INFINITY, Number.POSITI
 export function settingOf(standing: Standing, name: string): Setting {
   const { rule, ground } = standing;
   const parameter = rule.parameters.indexOf(name);
-  const bounds = standing.fit?.options.bounds?.[name] ?? rule.bounds[name] ?? open;
+  const bounds = standing.fit ? problemOf(standing.fit).bounds(name) : (rule.bounds[name] ?? open);
   if (parameter >= 0)
     return {
       name,

@@ -9,20 +9,14 @@ import {
   runStart,
   type StartOptions,
 } from "../../dynamics/index.js";
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import { type RunHooks, type Tick, ticker } from "../../numeric/index.js";
-import {
-  type FitGround,
-  fitGround,
-  fittedNoise,
-  type Ground,
-  type Noise,
-  ruleNoise,
-} from "../../projection/index.js";
-import type { PeriodAxis } from "../../record/index.js";
+import { type FitGround, fitGround, type Ground, type Noise, ruleNoise } from "../../projection/index.js";
+import { indexOf, labelAt, labelBetween, type PeriodAxis } from "../../record/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../../rule/index.js";
 import type { MeasureUnits } from "../measure/measure.js";
-import { refuseGroup } from "../refusals.js";
+import { refuseGroup, refusePeriod } from "../refusals.js";
+import { plain } from "../words/amount.js";
 
 /** What a decision is worked out from, beside the rule or fit itself. */
 export interface StandingOptions extends StartOptions, RunHooks {
@@ -54,6 +48,10 @@ export interface Standing extends MeasureUnits {
   /** Row of the path that is the present; what is ahead begins one row later. */
   readonly present: number;
   readonly axis: PeriodAxis;
+  /** Time of period 0 of the axis, in the period column's unit. */
+  readonly zero: number;
+  /** The period column's value of a period that is named by its label, or given as such a value. */
+  readonly timeOf: (period: string | number) => number;
   /** The period column's value at a row. */
   readonly timeAt: (row: number) => number;
   readonly change: readonly (Noise | undefined)[];
@@ -101,8 +99,11 @@ function fitStanding(fit: Fit, options: StandingOptions): Standing {
     fitGround: ground,
     present: ground.recordEnd - ground.from,
     axis,
+    zero: first,
     timeAt: (row) => first + (ground.from + row) * axis.step.every,
-    change: fittedNoise(fit, group).change,
+    timeWords: timeWordsOf(axis, first),
+    timeOf: timeReader(axis, first),
+    change: problemOf(fit).group(group.group).noise.change,
     plans,
     paths: options.paths ?? 2000,
     seed: options.seed ?? 1,
@@ -135,7 +136,10 @@ function ruleStanding(rule: Rule, options: StandingOptions): Standing {
     fitGround: undefined,
     present: 0,
     axis,
+    zero: first,
     timeAt: (row) => first + (from + row) * axis.step.every,
+    timeWords: timeWordsOf(axis, first),
+    timeOf: timeReader(axis, first),
     change: ruleNoise(rule, parameters, options.noise),
     plans: options.inputs ?? {},
     paths: options.paths ?? 2000,
@@ -144,5 +148,20 @@ function ruleStanding(rule: Rule, options: StandingOptions): Standing {
     planned,
     unitOf: (name) => rule.units[stateOf(name)] ?? "",
     periodUnit: axis.unit,
+  };
+}
+
+/** A time of the period column in a sentence; `zero` is that of period 0. */
+function timeWordsOf(axis: PeriodAxis, zero: number): (time: number) => string {
+  if (axis.counts === "numbers") return (time) => `${axis.unit} ${plain(time, 5)}`;
+  return (time) => labelBetween(axis, 0, (time - zero) / axis.step.every);
+}
+
+function timeReader(axis: PeriodAxis, zero: number): Standing["timeOf"] {
+  return (period) => {
+    if (typeof period === "number") return period;
+    const index = indexOf(axis, period);
+    if (index === undefined) throw refusePeriod(period, labelAt(axis, 0), labelAt(axis, 1));
+    return zero + index * axis.step.every;
   };
 }

@@ -1,17 +1,17 @@
 import type { Fit } from "../../estimate/index.js";
+import { periodsAfter, periodWords } from "../../record/index.js";
 import { type Rule, ruleLabel } from "../../rule/index.js";
 
 /** The record that an answer stands on: "the record of 58 values to hour 240". */
 function recordWords(fit: Fit): string {
-  const { groups, period } = fit.observations;
+  const { groups, axis } = fit.observations;
   const count = groups.reduce(
     (sum, group) =>
       sum + Object.values(group.values).reduce((n, values) => n + values.filter(Number.isFinite).length, 0),
     0,
   );
-  const last = Math.max(...groups.map((group) => group.time[group.time.length - 1]!));
-  const label = groups.length === 1 ? groups[0]!.labels?.[groups[0]!.labels.length - 1] : undefined;
-  return `the record of ${count} values to ${label ?? `${period.unit} ${Number(last.toPrecision(6))}`}`;
+  const last = groups.map((group) => periodsAfter(axis, group.axis)! + group.index[group.index.length - 1]!);
+  return `the record of ${count} values to ${periodWords(axis, Math.max(...last))}`;
 }
 
 /** Longest rule that is named in a sentence. */

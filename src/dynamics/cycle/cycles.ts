@@ -4,7 +4,7 @@ import { type Multiplier, multipliersOf } from "../rest/multiplier.js";
 import { type Stability, stabilityOf } from "../rest/stability.js";
 import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.js";
 import { type SearchRange, searchRanges } from "../setting/search-range.js";
-import { cyclesOfOneState } from "./cycle-points.js";
+import { cyclesOfOneState, slopeAlong } from "./cycle-points.js";
 
 /** Values that come round again after a number of periods, and not before. */
 export interface Cycle extends Stability {
@@ -43,15 +43,7 @@ export interface CyclesOptions extends HeldSetting {
 const shown = (value: number): string => String(Number(value.toPrecision(6)));
 
 function described(held: HeldStep, points: readonly number[]): Cycle {
-  const state = new Float64Array(1);
-  let slope = 1;
-  let residual = 0;
-  points.forEach((x, i) => {
-    state[0] = x;
-    const { next, matrix } = held.slopes(state);
-    slope *= matrix[0]!;
-    residual = Math.max(residual, Math.abs(next[0]! - points[(i + 1) % points.length]!));
-  });
+  const { slope, residual } = slopeAlong(held, points);
   const [multiplier] = multipliersOf(Float64Array.of(slope), 1);
   const stability = stabilityOf([multiplier!]);
   const list = points.map(shown).join(", ");

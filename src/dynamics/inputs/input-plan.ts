@@ -1,5 +1,5 @@
 import { nearestNames } from "../../numeric/index.js";
-import { indexOf, labelAt, type PeriodAxis } from "../../record/index.js";
+import { indexOf, labelAt, type PeriodAxis, periodWords } from "../../record/index.js";
 import { badPlan, shortPlan } from "../refusals.js";
 
 /**
@@ -57,7 +57,7 @@ export function plannedValues(name: string, plan: InputPlan, periods: PlannedPer
   if (bad < 0) return values;
   throw badPlan(
     name,
-    `${labelAt(periods.axis, periods.first + bad)} has ${values[bad]}, which is not a finite number`,
+    `${periodWords(periods.axis, periods.first + bad)} has ${values[bad]}, which is not a finite number`,
   );
 }
 
@@ -87,6 +87,11 @@ function valuesOf(name: string, plan: LevelPlan, periods: PlannedPeriods): Float
     throw badPlan(
       name,
       `it has no part \`${strange}\`. Write { usual, from, at }, or { byGroup: { ... } } for a plan a group`,
+    );
+  if (typeof plan.usual !== "number")
+    throw badPlan(
+      name,
+      `\`usual\` is ${String(plan.usual)}. Write the level that holds where \`from\` and \`at\` say nothing`,
     );
   const steps = placed(name, "from", plan.from, periods).sort(([a], [b]) => a - b);
   const values = new Float64Array(needed).fill(plan.usual);

@@ -1,4 +1,4 @@
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import type { Tick } from "../../numeric/index.js";
 import type { ObservedGroup } from "../../record/index.js";
 import { fitLabels } from "../compare/fit-labels.js";
@@ -49,7 +49,7 @@ interface Target {
 export function rollingOrigin(fits: readonly Fit[], plan: OriginPlan): RollingOrigin | undefined {
   const [first] = fits;
   if (first === undefined) return undefined;
-  const logs = fits.map((fit) => fit.options.distribution === "lognormal");
+  const logs = fits.map((fit) => problemOf(fit).scale.log);
   const naive = naiveForecasts(logs[0]!);
   const made = first.observations.groups.flatMap((group) => {
     const last = group.index.length - 1;

@@ -1,7 +1,7 @@
-import type { Fit, FitOptions } from "../../estimate/index.js";
-import { fit as fitRule } from "../../estimate/index.js";
+import { type Fit, type FitOptions, problemOf } from "../../estimate/index.js";
 import { type RunHooks, type Tick, ticker } from "../../numeric/index.js";
 import type { Observations } from "../../record/index.js";
+import { ruleLabel } from "../../rule/index.js";
 import type { ErrorAdvice } from "../check/error-advice.js";
 import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseNothingFits } from "../refusals.js";
@@ -26,7 +26,9 @@ export interface ProposeOptions extends Omit<FitOptions, "errors" | "intervals">
 
 /** A rule that was tried on a record. */
 export interface ProposedRule {
+  /** In the catalogue: `rules[name]`. */
   readonly name: string;
+  /** What the rule is called. */
   readonly rule: string;
   readonly errors: "process" | "observation";
   readonly parameters: number;
@@ -54,6 +56,7 @@ export interface Proposal {
   readonly naiveHeldOut: { readonly name: string; readonly score: number } | undefined;
   readonly verdict: {
     readonly kind: "supported" | "undecided" | "none-adequate";
+    /** By their names in the catalogue. */
     readonly rules: readonly string[];
   };
   /** Fits of the supported rules, with intervals, ready for `check`, `compare` and `forecast`. */
@@ -94,13 +97,15 @@ export function propose(observations: Observations, options: ProposeOptions = {}
     ...failed,
     ...left,
   ];
-  return judged({ record, takenFrom, settings: others, tried, seed, errors, notTried, tick });
+  const assumedNormal = others.distribution === undefined;
+  return judged({ record, takenFrom, assumedNormal, tried, seed, errors, notTried, tick });
 }
 
 interface Trial {
   readonly record: Observations;
   readonly takenFrom: string | undefined;
-  readonly settings: Omit<FitOptions, "errors">;
+  /** Whether no distribution was given. */
+  readonly assumedNormal: boolean;
   readonly tried: readonly Tried[];
   readonly notTried: readonly NotTried[];
   readonly errors: ProposeOptions["errors"];
@@ -108,7 +113,7 @@ interface Trial {
   readonly tick: Tick;
 }
 
-function judged({ record, takenFrom, settings, tried, notTried, errors, seed, tick }: Trial): Proposal {
+function judged({ record, takenFrom, assumedNormal, tried, notTried, errors, seed, tick }: Trial): Proposal {
   const advice = errors === undefined ? adviceOn(tried, seed, tick) : undefined;
   const chosen = errors ?? advice?.kind ?? "undecided";
   const kinds = chosen === "undecided" ? (["process", "observation"] as const) : [chosen];
@@ -117,7 +122,7 @@ function judged({ record, takenFrom, settings, tried, notTried, errors, seed, ti
   const judgedRows = standings.map((standing, i) => rowOf(standing, held?.scores[i], held?.beatenBy[i]));
   const rows = judgedRows
     .sort((a, b) => Number(b.supported) - Number(a.supported) || a.difference - b.difference)
-    .map((row) => withFit(row, tried, record, settings));
+    .map((row) => withFit(row, tried));
   const names = [...new Set(rows.filter(({ row }) => row.supported).map(({ row }) => row.name))];
   const kind = names.length === 0 ? "none-adequate" : names.length === 1 ? "supported" : "undecided";
   const result = {
@@ -138,7 +143,7 @@ function judged({ record, takenFrom, settings, tried, notTried, errors, seed, ti
     heldOut: held?.values,
     takenFrom,
     unread,
-    assumedNormal: settings.distribution === undefined,
+    assumedNormal,
   });
   return { kind: "proposal", ...result, ...words };
 }
@@ -149,7 +154,7 @@ function rowOf(standing: Standing, heldOut: number | undefined, beatenBy: string
     beatenBy === undefined ? reason : `clearly worse than "${beatenBy}" on the last fifth, held out`;
   return {
     name: tried.name,
-    rule: tried.fit.rule.text,
+    rule: ruleLabel(tried.fit.rule),
     errors: tried.errors,
     parameters: tried.unknowns,
     aicCorrected: tried.aicCorrected,
@@ -165,13 +170,10 @@ function rowOf(standing: Standing, heldOut: number | undefined, beatenBy: string
 function withFit(
   row: ProposedRule,
   tried: readonly Tried[],
-  record: Observations,
-  settings: Omit<FitOptions, "errors">,
 ): { readonly row: ProposedRule; readonly fit?: Fit } {
   const { fit } = tried.find((each) => each.name === row.name && each.errors === row.errors)!;
   if (!row.supported) return { row };
-  const bounds = fit.options.bounds ?? {};
-  const whole = fitRule(fit.rule, record, { ...settings, bounds, errors: row.errors });
+  const whole = problemOf(fit).refit({ intervals: "profile" });
   const open = whole.groups.flatMap((group) =>
     group.estimates
       .filter((estimate) => estimate.standardError === undefined)

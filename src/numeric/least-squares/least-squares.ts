@@ -1,4 +1,5 @@
 import { covarianceFromTriangle } from "../algebra/covariance-from-triangle.js";
+import { freezeDeep } from "../freeze-deep.js";
 import { badBounds, badStart, otherNumberOf, tooFewResiduals } from "../refusals.js";
 import type { StopReason } from "../search/stop-reason.js";
 import { type Minimum, minimiseSquares } from "./minimise-squares.js";
@@ -12,7 +13,7 @@ export interface LeastSquaresProblem {
   readonly jacobian?: (parameters: Float64Array) => ArrayLike<number>;
   /** Values of the parameters where the search begins. */
   readonly start: ArrayLike<number>;
-  /** Lowest admitted values; default no limit. */
+  /** Lowest and highest admitted values; open when absent. A parameter with equal bounds is held there. */
   readonly lower?: ArrayLike<number>;
   /** Highest admitted values; default no limit. */
   readonly upper?: ArrayLike<number>;
@@ -30,7 +31,7 @@ export interface LeastSquaresSolution {
   readonly covariance: Float64Array;
   readonly residuals: Float64Array;
   readonly sumOfSquares: number;
-  /** sumOfSquares / (rows - size); undefined when no residual is left over. */
+  /** sumOfSquares / (rows - parameters not held); undefined when no residual is left over. */
   readonly variance: number | undefined;
   /** Number of parameters, or combinations of them, that the residuals determine at the solution. */
   readonly rank: number;
@@ -75,7 +76,8 @@ export function leastSquares(problem: LeastSquaresProblem): LeastSquaresSolution
   if (rows < size) throw tooFewResiduals(rows, size);
   const { residuals, jacobian } = problem;
   const system = residualSystem({ residuals, jacobian, rows, lower, upper, scale });
-  return solution(system, lowest(system, start, lower, upper));
+  const held = lower.filter((bound, j) => bound === upper[j]).length;
+  return solution(system, lowest(system, start, lower, upper), rows - size + held);
 }
 
 function optional(
@@ -103,14 +105,13 @@ function lowest(
   return minimiseSquares(system, best.estimates, { ...bounded, reach: 1 });
 }
 
-function solution(system: ResidualSystem, found: Minimum): LeastSquaresSolution {
+function solution(system: ResidualSystem, found: Minimum, left: number): LeastSquaresSolution {
   const { size, triangle } = system;
   system.evaluate(found.estimates);
-  const left = system.residuals.length - size;
   const variance = left > 0 ? found.sumOfSquares / left : undefined;
   const { covariance, determined, rank } = covarianceFromTriangle(triangle, size);
   for (let i = 0; i < covariance.length; i++) covariance[i] = covariance[i]! * (variance ?? Number.NaN);
-  return Object.freeze({
+  return freezeDeep({
     kind: "least-squares",
     estimates: found.estimates,
     standardErrors: determined.map((known, i) =>

@@ -17,7 +17,13 @@ export interface IndexedRows {
 export function axisOfRows(placed: PlacedRows, indexed: IndexedRows): PeriodAxis {
   const { column, calendar, moments } = placed;
   const { step, name } = calendar;
-  const common = { column, unit: step.of, step, ...(name && { calendar: name }) };
+  const common = {
+    kind: "period-axis",
+    column,
+    unit: step.of,
+    step,
+    ...(name && { calendar: name }),
+  } as const;
   const own =
     moments === undefined
       ? numbersOf(placed, indexed)

@@ -11,6 +11,7 @@ import { momentText, monthText, type PeriodForm, type PeriodText, periodText } f
  * of the series that the axis belongs to.
  */
 export interface PeriodAxis {
+  readonly kind: "period-axis";
   /** The period column, or "year, week" for a pair. */
   readonly column: string;
   /** Unit of the step: "month". */
@@ -48,6 +49,19 @@ export function labelAt(axis: PeriodAxis, index: number): string {
 /** The labels of several periods. */
 export function labelsAt(axis: PeriodAxis, indexes: ArrayLike<number>): readonly string[] {
   return Array.from(indexes, (index) => labelAt(axis, index));
+}
+
+/**
+ * What a place between two periods is called: the date or number that lies there, or, where labels name whole weeks,
+ * months or years, the one that it lies in.
+ */
+export function labelBetween(axis: PeriodAxis, index: number, fraction: number): string {
+  const place = index + fraction;
+  if (Math.abs(place - Math.round(place)) <= rounding) return labelAt(axis, Math.round(place));
+  if (axis.counts === "numbers") return labelAt(axis, place);
+  if (!isDated(axis)) return labelAt(axis, Math.ceil(place));
+  const [before, after] = [momentAt(axis, Math.floor(place)), momentAt(axis, Math.floor(place) + 1)];
+  return momentText(before + (after - before) * (place - Math.floor(place)), axis.form);
 }
 
 /** A period in a sentence: "month 33", or its label where periods are not mere numbers. */

@@ -20,29 +20,41 @@ export function joined(record: Observations, later: Observations): Observations 
   });
   const sum = (key: "read" | "used" | "flagged" | "corrected" | "refused"): number =>
     record.counts[key] + later.counts[key];
-  return Object.freeze({
+  return {
     ...record,
-    groups: Object.freeze(groups),
+    groups,
     axis: groups.length === 1 ? groups[0]!.axis : record.axis,
-    findings: Object.freeze([
+    findings: [
       ...record.findings,
-      ...later.findings.map((finding) =>
-        Object.freeze({
-          ...finding,
-          row: finding.row === undefined ? undefined : finding.row + rowsBefore,
-          message: `Of the rows added: ${finding.message}`,
-        }),
-      ),
-    ]),
-    counts: Object.freeze({
+      ...later.findings.map((finding) => ({
+        ...finding,
+        row: finding.row === undefined ? undefined : finding.row + rowsBefore,
+        message: `Of the rows added: ${finding.message}`,
+      })),
+    ],
+    ...decisionsOf(record, later, rowsBefore),
+    counts: {
       ...record.counts,
       read: sum("read"),
       used: sum("used"),
       flagged: sum("flagged"),
       corrected: sum("corrected"),
       refused: sum("refused"),
-    }),
-  });
+    },
+  };
+}
+
+function decisionsOf(
+  record: Observations,
+  later: Observations,
+  rowsBefore: number,
+): Pick<Observations, "decisions"> {
+  const { decisions = [] } = later;
+  const all = [
+    ...(record.decisions ?? []),
+    ...decisions.map((each) => ({ ...each, row: each.row + rowsBefore })),
+  ];
+  return all.length === 0 ? {} : { decisions: all };
 }
 
 function joinedGroup(group: ObservedGroup, later: ObservedGroup, rowsBefore: number): ObservedGroup {
@@ -69,7 +81,7 @@ function joinedGroup(group: ObservedGroup, later: ObservedGroup, rowsBefore: num
   };
   const index = joinedNumbers(group.index, moved.index);
   const labels = group.labels && later.labels && [...group.labels, ...later.labels];
-  return Object.freeze({
+  return {
     name: group.name,
     axis: labels === undefined ? axis : axisOfLabels(axis, labels, index),
     index,
@@ -79,7 +91,7 @@ function joinedGroup(group: ObservedGroup, later: ObservedGroup, rowsBefore: num
     ...joinedInputs(group, moved, index),
     ...(labels && { labels }),
     ...joinedMarks(group, later),
-  });
+  };
 }
 
 function axisOfLabels(axis: PeriodAxis, labels: readonly string[], index: Int32Array): PeriodAxis {
@@ -108,7 +120,7 @@ function joinedInputs(
   if (left.length === 0) return { inputs: at(index) };
   const periods = Int32Array.from(left, ({ period }) => period);
   const rows = Int32Array.from(left, ({ row }) => row);
-  return { inputs: at(index), withoutValue: Object.freeze({ index: periods, inputs: at(periods), rows }) };
+  return { inputs: at(index), withoutValue: { index: periods, inputs: at(periods), rows } };
 }
 
 /** Weights, limits and replicates, each where one of the two has them. */

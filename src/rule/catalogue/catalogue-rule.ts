@@ -4,10 +4,10 @@ import type { RecurrenceOptions } from "../recurrence-options.js";
 import type { Rule } from "../rule.js";
 import type { CatalogueEntry } from "./named-rule.js";
 
-/** What may be said of a rule from the catalogue; its text is given. */
+/** Options of a catalogue rule; its text and parameters are given. */
 export type NamedRuleOptions = Omit<RecurrenceOptions, "parameters">;
 
-/** Units of all names, from that of the first state: "1/level" becomes "1/(cells/mL)", written out. */
+/** Units of all names, derived from the unit of the first state: with cells/mL, "1/level" becomes "mL/cells". */
 function unitsFromState(
   entry: CatalogueEntry,
   given: Readonly<Record<string, string>>,
@@ -23,7 +23,7 @@ function unitsFromState(
   return { ...Object.fromEntries(derived), ...given };
 }
 
-/** Makes the rule of a catalogue entry; what is given prevails over what the entry says. */
+/** Makes the rule of a catalogue entry; options override the entry. */
 export function catalogueRule(entry: CatalogueEntry, options: NamedRuleOptions = {}): Rule {
   const { text, inputs = [], bounds = {}, start = {}, ...about } = entry;
   const allInputs = [...new Set([...inputs, ...(options.inputs ?? [])])];

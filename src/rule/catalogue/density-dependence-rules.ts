@@ -15,7 +15,7 @@ import {
 
 const logistic: CatalogueEntry = {
   name: "logistic",
-  title: "Quadratic rule (discrete logistic)",
+  title: "Discrete logistic (quadratic map)",
   text: "ΔN = r*N*(1 - N/K)",
   source: "May (1976), Simple mathematical models with very complicated dynamics, Nature 261, 459-467",
   quantities: { N: level, r: rate, K: carryingCapacity },
@@ -31,12 +31,12 @@ const logistic: CatalogueEntry = {
     { when: "r == 3", values: { N: "4*K/3*sin(2^t*asin(sqrt(3*N0/(4*K))))^2" } },
   ],
   remarks:
-    "One-sided approach to K for r up to 1, damped alternation to 2, a 2-cycle to sqrt(6), chaos with periodic windows beyond about 2.570; above 3 it leaves its range. There is no general closed form.",
+    "For r up to 1 it approaches K from one side, up to 2 with damped oscillations; a 2-cycle up to sqrt(6); chaos with periodic windows beyond about 2.570. Above 3 it leaves its range. There is no general closed form.",
 };
 
 const bevertonHolt: CatalogueEntry = {
   name: "bevertonHolt",
-  title: "Beverton-Holt rule: the logistic curve sampled at equal steps",
+  title: "Beverton-Holt: the logistic curve sampled at equal steps",
   text: "N[t+1] = R*N/(1 + (R - 1)*N/K)",
   source: "Beverton and Holt (1957), On the Dynamics of Exploited Fish Populations",
   quantities: { N: level, R: growthFactor, K: carryingCapacity },
@@ -48,12 +48,13 @@ const bevertonHolt: CatalogueEntry = {
     { at: { N: "K" }, multiplier: "1/R" },
   ],
   closedForms: [{ values: { N: "K*N0/(N0 + (K - N0)*R^(-t))" } }],
-  remarks: "Always a one-sided approach to K; it never cycles. R is exp(r h) of the logistic curve.",
+  remarks:
+    "Approaches K from one side and never oscillates. R is exp(r*h) of the logistic curve with step h.",
 };
 
 const ricker: CatalogueEntry = {
   name: "ricker",
-  title: "Ricker rule",
+  title: "Ricker",
   text: "N[t+1] = N*exp(r*(1 - N/K))",
   source: "Ricker (1954), Stock and recruitment, J. Fish. Res. Board Can. 11, 559-623",
   quantities: { N: level, r: rate, K: carryingCapacity },
@@ -65,19 +66,19 @@ const ricker: CatalogueEntry = {
     { at: { N: "K" }, multiplier: "1 - r" },
   ],
   closedForms: [],
-  remarks: "Stable for r below 2, a 2-cycle to about 2.526, chaos from about 2.692; never negative.",
+  remarks: "Stable for r below 2, a 2-cycle up to about 2.526, chaos from about 2.692. Never negative.",
 };
 
 const hassell: CatalogueEntry = {
   name: "hassell",
-  title: "Hassell rule",
+  title: "Hassell",
   text: "N[t+1] = lam*N/(1 + a*N)^b",
   source: "Hassell (1975), Density-dependence in single-species populations, J. Anim. Ecol. 44, 283-295",
   quantities: {
     N: level,
     lam: growthFactor,
-    a: perStateUnit("crowding"),
-    b: dimensionless("how sharply crowding acts"),
+    a: perStateUnit("crowding coefficient"),
+    b: dimensionless("strength of density dependence"),
   },
   validWhen: ["lam > 1", "a > 0", "b > 0", "N0 >= 0"],
   bounds: { lam: aboveOne, a: positive, b: positive, N: positive },
@@ -88,19 +89,19 @@ const hassell: CatalogueEntry = {
   ],
   closedForms: [{ when: "b == 1", values: { N: "lam^t*N0/(1 + a*N0*(lam^t - 1)/(lam - 1))" } }],
   remarks:
-    "One-sided for b up to 1, where b = 1 is Beverton-Holt. The three parameters are strongly correlated.",
+    "Approaches its equilibrium from one side for b up to 1; b = 1 is Beverton-Holt. Estimates of the three parameters are strongly correlated.",
 };
 
 const maynardSmithSlatkin: CatalogueEntry = {
   name: "maynardSmithSlatkin",
-  title: "Maynard Smith-Slatkin rule",
+  title: "Maynard Smith-Slatkin",
   text: "N[t+1] = lam*N/(1 + (a*N)^b)",
   source: "Maynard Smith and Slatkin (1973), The stability of predator-prey systems, Ecology 54, 384-391",
   quantities: {
     N: level,
     lam: growthFactor,
-    a: perStateUnit("crowding"),
-    b: dimensionless("how sharply crowding acts"),
+    a: perStateUnit("crowding coefficient"),
+    b: dimensionless("strength of density dependence"),
   },
   validWhen: ["lam > 1", "a > 0", "b > 0", "N0 >= 0"],
   bounds: { lam: aboveOne, a: positive, b: positive, N: positive },
@@ -111,16 +112,21 @@ const maynardSmithSlatkin: CatalogueEntry = {
   ],
   closedForms: [{ when: "b == 1", values: { N: "lam^t*N0/(1 + a*N0*(lam^t - 1)/(lam - 1))" } }],
   remarks:
-    "From undercompensation (b below 1) to sharp overcompensation; stable if and only if b*(1 - 1/lam) < 2.",
+    "From undercompensation (b below 1) to strong overcompensation; stable if and only if b*(1 - 1/lam) < 2.",
 };
 
 const thetaLogistic: CatalogueEntry = {
   name: "thetaLogistic",
-  title: "Theta-logistic rule (Ricker form)",
+  title: "Theta-logistic (Ricker form)",
   text: "N[t+1] = N*exp(r*(1 - (N/K)^theta))",
   source:
     "Gilpin and Ayala (1973), Global models of growth and competition, PNAS 70, 3590-3593, in Ricker's form",
-  quantities: { N: level, r: rate, K: carryingCapacity, theta: dimensionless("how late crowding sets in") },
+  quantities: {
+    N: level,
+    r: rate,
+    K: carryingCapacity,
+    theta: dimensionless("shape: larger values delay density dependence"),
+  },
   validWhen: ["r > 0", "K > 0", "theta > 0", "N0 >= 0"],
   bounds: { r: positive, K: positive, theta: positive, N: positive },
   start: { r: 0.5, theta: 1 },
@@ -129,14 +135,14 @@ const thetaLogistic: CatalogueEntry = {
     { at: { N: "K" }, multiplier: "1 - r*theta" },
   ],
   closedForms: [],
-  remarks: "Stable for r*theta below 2. Near K only the product r*theta is well determined by data.",
+  remarks: "Stable for r*theta below 2. Near K, data determine only the product r*theta.",
 };
 
 const gompertz: CatalogueEntry = {
   name: "gompertz",
-  title: "Discrete Gompertz rule",
+  title: "Discrete Gompertz",
   text: "N[t+1] = exp(a)*N^b",
-  source: "Gompertz (1825), Phil. Trans. R. Soc. 115, 513-583, stepped",
+  source: "Gompertz (1825), Phil. Trans. R. Soc. 115, 513-583, in discrete time",
   quantities: {
     N: level,
     a: dimensionless("intercept on the log scale"),
@@ -148,16 +154,21 @@ const gompertz: CatalogueEntry = {
   equilibria: [{ at: { N: "exp(a/(1 - b))" }, multiplier: "b" }],
   closedForms: [{ values: { N: "exp(b^t*log(N0) + a*(1 - b^t)/(1 - b))" } }],
   remarks:
-    "Linear on the log scale, so the gap of the logarithms shrinks by b each period. Growth per head has no bound as N falls to zero: not for extrapolation to inoculum size.",
+    "Linear on the log scale: the log distance to equilibrium shrinks by the factor b each period. Per-capita growth is unbounded as N approaches zero, so do not extrapolate to inoculum size.",
 };
 
 const allee: CatalogueEntry = {
   name: "allee",
-  title: "Strong Allee rule",
+  title: "Strong Allee effect",
   text: "N[t+1] = N*exp(r*(1 - N/K)*(N/A - 1))",
   source:
     "Allee (1931), Animal Aggregations, for the effect; the exponential form is common practice, no source",
-  quantities: { N: level, r: rate, K: carryingCapacity, A: inStateUnit("level below which it collapses") },
+  quantities: {
+    N: level,
+    r: rate,
+    K: carryingCapacity,
+    A: inStateUnit("Allee threshold: below it the population collapses"),
+  },
   validWhen: ["r > 0", "A > 0", "A < K", "N0 >= 0"],
   bounds: { r: positive, K: positive, A: positive, N: positive },
   start: { r: 0.3 },
@@ -168,7 +179,7 @@ const allee: CatalogueEntry = {
   ],
   closedForms: [],
   remarks:
-    "A divides the basins: below it the level collapses, and so it does from levels that overshoot to below A.",
+    "A separates the basins of attraction: below A the population collapses, and so does one that overshoots K and lands below A.",
 };
 
 /** ΔN = r N (1 - N/K). */

@@ -1,6 +1,6 @@
 import type { Rule } from "../rule.js";
 import { catalogueRule, type NamedRuleOptions } from "./catalogue-rule.js";
-import { type LagOption, lagged } from "./lag.js";
+import { type LagOption, lagged, periodCount } from "./lag.js";
 import type { CatalogueEntry } from "./named-rule.js";
 import {
   carryingCapacity,
@@ -17,7 +17,7 @@ import {
 
 const delayed = (lag: number): CatalogueEntry => ({
   name: "delayedDensity",
-  title: `Density that acts ${lag} periods late`,
+  title: `Delayed density dependence: Ricker with a lag of ${periodCount(lag)}`,
   text: `N[t+1] = N*exp(r*(1 - ${lagged("N", lag)}/K))`,
   source: "Levin and May (1976), A note on difference-delay equations, Theor. Popul. Biol. 9, 178-187",
   quantities: { N: level, r: rate, K: carryingCapacity },
@@ -26,17 +26,17 @@ const delayed = (lag: number): CatalogueEntry => ({
   start: { r: 0.3 },
   equilibria: [{ at: { N: "0" } }, { at: { N: "K" }, ...(lag === 0 ? { multiplier: "1 - r" } : {}) }],
   closedForms: [],
-  remarks: `Stable if and only if r lies between 0 and 2*cos(pi*T/(2*T + 1)) = ${(2 * Math.cos((Math.PI * lag) / (2 * lag + 1))).toPrecision(6)}.`,
+  remarks: `With the lag T, stable if and only if r lies between 0 and 2*cos(pi*T/(2*T + 1)) = ${(2 * Math.cos((Math.PI * lag) / (2 * lag + 1))).toPrecision(6)}.`,
 });
 
-const host = quantityWithUnit("host level", "level");
-const parasitoid = quantityWithUnit("parasitoid level", "level");
+const host = quantityWithUnit("host density", "level");
+const parasitoid = quantityWithUnit("parasitoid density", "level");
 const search = perStateUnit("searching efficiency");
-const yieldOf = dimensionless("parasitoids from one host attacked");
+const yieldOf = dimensionless("parasitoids per attacked host");
 
 const nicholsonBailey: CatalogueEntry = {
   name: "nicholsonBailey",
-  title: "Host and parasitoid with random search",
+  title: "Nicholson-Bailey host-parasitoid model: random search",
   text: "spared = exp(-a*P)\nH[t+1] = lam*H*spared\nP[t+1] = c*H*(1 - spared)",
   source:
     "Nicholson and Bailey (1935), The balance of animal populations, Proc. Zool. Soc. Lond. 105, 551-598",
@@ -46,12 +46,12 @@ const nicholsonBailey: CatalogueEntry = {
   start: { lam: 2, c: 1 },
   equilibria: [{ at: { H: "lam*log(lam)/((lam - 1)*a*c)", P: "log(lam)/a" } }],
   closedForms: [],
-  remarks: "Always unstable: swings grow until one of the two is gone.",
+  remarks: "Always unstable: oscillations grow until one of the two is extinct.",
 };
 
 const clumped: CatalogueEntry = {
   name: "clumpedParasitoid",
-  title: "Host and parasitoid with clumped search",
+  title: "Host-parasitoid model with aggregated attacks (negative binomial)",
   text: "spared = (1 + a*P/k)^(-k)\nH[t+1] = lam*H*spared\nP[t+1] = c*H*(1 - spared)",
   source: "May (1978), Host-parasitoid systems in patchy environments, J. Anim. Ecol. 47, 833-844",
   quantities: {
@@ -60,7 +60,7 @@ const clumped: CatalogueEntry = {
     lam: growthFactor,
     a: search,
     c: yieldOf,
-    k: dimensionless("clumping, smaller is more clumped"),
+    k: dimensionless("aggregation: smaller values mean stronger clumping"),
   },
   validWhen: ["lam > 1", "a > 0", "c > 0", "k > 0", "H0 >= 0", "P0 >= 0"],
   bounds: {
@@ -86,7 +86,7 @@ const clumped: CatalogueEntry = {
 
 const competition: CatalogueEntry = {
   name: "competition",
-  title: "Two competitors in steps",
+  title: "Two-species competition (Leslie-Gower)",
   text: "N1[t+1] = R1*N1/(1 + (N1 + a12*N2)/M1)\nN2[t+1] = R2*N2/(1 + (N2 + a21*N1)/M2)",
   source:
     "Leslie and Gower (1958), The properties of a stochastic model for two competing species, Biometrika 45, 316-330",
@@ -95,10 +95,10 @@ const competition: CatalogueEntry = {
     N2: level,
     R1: growthFactor,
     R2: growthFactor,
-    M1: inStateUnit("crowding scale of the first"),
-    M2: inStateUnit("crowding scale of the second"),
-    a12: dimensionless("effect of one of the second on the first"),
-    a21: dimensionless("effect of one of the first on the second"),
+    M1: inStateUnit("crowding scale of species 1"),
+    M2: inStateUnit("crowding scale of species 2"),
+    a12: dimensionless("effect of one individual of species 2 on species 1"),
+    a21: dimensionless("effect of one individual of species 1 on species 2"),
   },
   validWhen: ["R1 > 1", "R2 > 1", "M1 > 0", "M2 > 0", "a12 >= 0", "a21 >= 0", "N10 >= 0", "N20 >= 0"],
   bounds: {
@@ -126,10 +126,10 @@ const competition: CatalogueEntry = {
   ],
   closedForms: [],
   remarks:
-    "They stay together if and only if each can grow into the other's rest level. The system is monotone: no chaos.",
+    "Both persist if and only if each can invade the equilibrium of the other. The system is monotone, so there is no chaos.",
 };
 
-/** What adults and recruits need: the delay, and whether more adults always mean more recruits. */
+/** The lag of recruitment, and whether more adults always mean more recruits. */
 export interface RecruitOption extends LagOption {
   /** Whether more adults always mean more recruits, or too many mean fewer; default "rising". */
   readonly recruits?: "rising" | "humped";
@@ -138,25 +138,25 @@ export interface RecruitOption extends LagOption {
 function adults(lag: number, recruits: "rising" | "humped"): CatalogueEntry {
   const parents = lagged("B", lag);
   const born = recruits === "rising" ? `a*${parents}/(1 + b*${parents})` : `a*${parents}*exp(-b*${parents})`;
-  const rest = recruits === "rising" ? "(a/(1 - s) - 1)/b" : "log(a/(1 - s))/b";
+  const equilibrium = recruits === "rising" ? "(a/(1 - s) - 1)/b" : "log(a/(1 - s))/b";
   return {
     name: "adultsAndRecruits",
-    title: `Adults that survive, and recruits ${lag} periods late`,
+    title: `Adult survival with recruitment delayed by ${periodCount(lag)}`,
     text: `B[t+1] = s*B + ${born}`,
     source: "Clark (1976), A delayed-recruitment model of population dynamics, J. Math. Biol. 3, 381-391",
     quantities: {
       B: level,
-      s: dimensionless("share of adults that survive a period"),
+      s: dimensionless("fraction of adults that survive one period"),
       a: growthFactor,
-      b: perStateUnit("crowding of recruits"),
+      b: perStateUnit("density dependence of recruitment"),
     },
     validWhen: ["s >= 0 and s < 1", "a > 0", "b > 0", "B0 >= 0"],
     bounds: { s: fraction, a: positive, b: positive, B: positive },
     start: { s: 0.6, a: 1 },
-    equilibria: [{ at: { B: "0" } }, { at: { B: rest }, when: "a > 1 - s" }],
+    equilibria: [{ at: { B: "0" } }, { at: { B: equilibrium }, when: "a > 1 - s" }],
     closedForms: [],
     remarks:
-      "It rests where (1 - s)*B equals the recruits. The delay can upset the rest level where recruits are humped, not where they rise.",
+      "Equilibrium where (1 - s)*B equals recruitment. The delay can destabilize it when recruitment is hump-shaped (Ricker), not when it saturates (Beverton-Holt).",
   };
 }
 

@@ -14,7 +14,7 @@ import * as stock from "./stock-rules.js";
 type PlainRule = (options?: NamedRuleOptions) => Rule;
 type DelayedRule = (options: NamedRuleOptions & LagOption) => Rule;
 
-/** A function for each named rule. */
+/** One function per catalogue rule. */
 export interface RuleCatalogue {
   readonly constantChange: PlainRule;
   readonly geometric: PlainRule;
@@ -53,8 +53,8 @@ export interface RuleCatalogue {
 }
 
 /**
- * The catalogue: rules that have a name, ready to be run, fitted and compared. Each is called for its rule;
- * options are those of `recurrence`, and for some a delay, a number of ages or a shelf life.
+ * The catalogue of named rules, ready to be run, fitted and compared. Each function returns its rule; options are
+ * those of `recurrence`, and for some a lag, a number of age classes or a shelf life, in periods.
  *
  * @example rules.bevertonHolt().text; // "N[t+1] = R*N/(1 + (R - 1)*N/K)"
  */

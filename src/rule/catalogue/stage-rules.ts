@@ -1,5 +1,6 @@
 import type { Rule } from "../rule.js";
 import { catalogueRule, type NamedRuleOptions } from "./catalogue-rule.js";
+import { periodCount } from "./lag.js";
 import type { CatalogueEntry, NamedQuantity } from "./named-rule.js";
 import { dimensionless, fraction, inStateUnit, level, positive } from "./quantities.js";
 
@@ -17,7 +18,7 @@ function ages(count: number): CatalogueEntry {
   const fertilities = all.map((k) => `f${k}`);
   return {
     name: "ages",
-    title: `Projection matrix of ${count} ages`,
+    title: `Leslie matrix with ${count} age classes`,
     text: [`n1[t+1] = ${births}`, ...later].join("\n"),
     source: "Leslie (1945), On the use of matrices in certain population mathematics, Biometrika 33, 183-212",
     quantities: {
@@ -25,8 +26,8 @@ function ages(count: number): CatalogueEntry {
         all.map((k) => `n${k}`),
         level,
       ),
-      ...record(fertilities, dimensionless("young a period from one of that age")),
-      ...record(survivals, dimensionless("share that lives on to the next age")),
+      ...record(fertilities, dimensionless("offspring per period of one individual of that age")),
+      ...record(survivals, dimensionless("fraction surviving to the next age")),
     },
     validWhen: [
       ...fertilities.map((name) => `${name} >= 0`),
@@ -42,11 +43,12 @@ function ages(count: number): CatalogueEntry {
       },
     ],
     closedForms: [],
-    remarks: "In the long run it grows by the dominant root, in stable proportions; elasticities sum to 1.",
+    remarks:
+      "In the long run it grows by the dominant eigenvalue, with a stable age distribution; elasticities sum to 1.",
   };
 }
 
-/** Names of stages, and which moves between them may happen; a share not listed is zero. */
+/** Names of stages, and the possible moves between them; the fraction of a move not listed is zero. */
 export interface StageOption {
   /** Names of the stages. */
   readonly stages: readonly string[];
@@ -64,13 +66,16 @@ function stages({ stages: names, moves }: StageOption): CatalogueEntry {
   const shares = all.map(([from, to]) => share(from, to));
   return {
     name: "stages",
-    title: "Shares that move between stages, as in overdue buckets of a loan book",
+    title: "Transition matrix between stages, such as delinquency buckets of a loan book",
     text: text.join("\n"),
     source: "common practice, no source",
     quantities: {
       ...record<NamedQuantity>(names, level),
       ...Object.fromEntries(
-        all.map(([from, to]) => [share(from, to), dimensionless(`share of ${from} that moves to ${to}`)]),
+        all.map(([from, to]) => [
+          share(from, to),
+          dimensionless(`fraction of ${from} that moves to ${to} per period`),
+        ]),
       ),
     },
     validWhen: shares.map((name) => `${name} >= 0`),
@@ -78,11 +83,11 @@ function stages({ stages: names, moves }: StageOption): CatalogueEntry {
     equilibria: [],
     closedForms: [],
     remarks:
-      "Stages that nothing leaves, such as cleared and written off, fill up. Shares drift with season and policy.",
+      "Absorbing stages, such as repaid and written off, only fill up. Fractions drift with season and policy.",
   };
 }
 
-/** How long goods last, and which are given out first. */
+/** Shelf life in periods, and which goods are issued first. */
 export interface PerishableOption {
   /** Periods that goods last. */
   readonly life: number;
@@ -101,7 +106,7 @@ function perishable(life: number, issue: "oldest-first" | "newest-first"): Catal
   const short = ["d", ...all.map((k) => `used${k}`)].join(" - ");
   return {
     name: "perishable",
-    title: `Goods that last ${life} periods, ${issue === "oldest-first" ? "oldest" : "newest"} first`,
+    title: `Perishable stock with a shelf life of ${periodCount(life)}, ${issue === "oldest-first" ? "oldest" : "newest"} issued first`,
     text: [...used, `outdated = a${life} - used${life}`, `short = ${short}`, "a1[t+1] = q", ...next].join(
       "\n",
     ),
@@ -112,8 +117,8 @@ function perishable(life: number, issue: "oldest-first" | "newest-first"): Catal
         all.map((k) => `a${k}`),
         level,
       ),
-      q: inStateUnit("received at the end of the period"),
-      d: inStateUnit("demand of the period"),
+      q: inStateUnit("quantity received at the end of the period"),
+      d: inStateUnit("demand in the period"),
     },
     validWhen: all.map((k) => `a${k}0 >= 0`),
     bounds: record(
@@ -122,8 +127,7 @@ function perishable(life: number, issue: "oldest-first" | "newest-first"): Catal
     ),
     equilibria: [],
     closedForms: [],
-    remarks:
-      "Which goods are given out first decides the waste. Demand beyond the shelf is lost, and reported as short.",
+    remarks: "The order of issue decides how much is wasted. Unmet demand is lost and reported as short.",
   };
 }
 
@@ -136,7 +140,7 @@ export interface AgesOption {
 /** n1' = f1 n1 + f2 n2 + ..., n2' = s1 n1, ... */
 export const agesRule = ({ ages: count, ...options }: NamedRuleOptions & AgesOption): Rule =>
   catalogueRule(ages(count), options);
-/** v' = P v, one share p_from_to a move. */
+/** v' = P v, one fraction p_from_to for each move. */
 export const stagesRule = ({ stages: names, moves, ...options }: NamedRuleOptions & StageOption): Rule =>
   catalogueRule(stages(moves === undefined ? { stages: names } : { stages: names, moves }), options);
 /** Age classes a1 (newest) to the oldest, receipts q, demand d. */

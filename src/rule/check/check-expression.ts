@@ -1,10 +1,10 @@
-import { argumentCountError, ruleError } from "../errors.js";
+import { argumentCountError, misplacedChangeRemedy, ruleError } from "../errors.js";
 import { ruleFunction } from "../functions.js";
 import type { Expression } from "../syntax/expression.js";
 import { checkName } from "./check-name.js";
 import type { Names } from "./names.js";
 
-/** A rule works with numbers; conditions are yes or no and stand only where one is asked for. */
+/** Rules compute with numbers; a condition may stand only where one is expected, as in `if`. */
 type Kind = "number" | "condition";
 
 const comparisons: ReadonlySet<string> = new Set(["<", "<=", ">", ">=", "==", "!="]);
@@ -12,28 +12,34 @@ const comparisons: ReadonlySet<string> = new Set(["<", "<=", ">", ">=", "==", "!
 function expectKind(names: Names, at: Expression, given: Kind, wanted: Kind): void {
   if (given === wanted) return;
   if (wanted === "number") {
-    const wrong = "This is a condition, yes or no, where a number is needed.";
+    const wrong = "This is a condition, but a number is needed here.";
     throw ruleError(
       "condition-for-number",
       names.text,
       at,
       wrong,
-      "Turn it into a number with if(condition, 1, 0).",
+      "To use a condition as a number, write if(condition, 1, 0).",
     );
   }
-  const wrong = "This is a number where a condition, yes or no, is needed.";
-  throw ruleError("number-for-condition", names.text, at, wrong, "Compare it with something, as in N > 0.");
+  const wrong = "This is a number, but a condition is needed here.";
+  throw ruleError(
+    "number-for-condition",
+    names.text,
+    at,
+    wrong,
+    "Compare the number with another one, as in N > 0.",
+  );
 }
 
 function checkCall(names: Names, at: Extract<Expression, { kind: "call" }>, line: number): Kind {
   const called = ruleFunction(at.name)!; // the parser lets only known functions be called
   if (at.name === "change") {
-    const wrong = "A change stands inside an expression.";
-    const remedy = "A change may only begin a line, as in ΔN = r*N. Use N - N[t-1] for the last change.";
+    const wrong = "change(...) can only start a line.";
+    const remedy = misplacedChangeRemedy;
     throw ruleError("misplaced-change", names.text, at, wrong, remedy);
   }
   if (at.args.length < called.minArgs || at.args.length > called.maxArgs) {
-    throw argumentCountError(names.text, at, called.usage, at.args.length);
+    throw argumentCountError(names.text, at, called, at.args.length);
   }
   at.args.forEach((part, index) => {
     const wanted = at.name === "if" && index === 0 ? "condition" : "number";
@@ -41,8 +47,8 @@ function checkCall(names: Names, at: Extract<Expression, { kind: "call" }>, line
   });
   const digits = at.args[1];
   if (at.name === "round" && digits !== undefined && !isDigits(digits)) {
-    const wrong = "The number of digits must be a whole number from 0 to 15.";
-    throw ruleError("unreadable-digits", names.text, digits, wrong, "Write it as in round(x, 2).");
+    const wrong = "The number of decimals must be a whole number from 0 to 15.";
+    throw ruleError("unreadable-digits", names.text, digits, wrong, "For two decimals, write round(x, 2).");
   }
   return "number";
 }
@@ -50,7 +56,7 @@ function checkCall(names: Names, at: Extract<Expression, { kind: "call" }>, line
 const isDigits = (at: Expression): boolean =>
   at.kind === "number" && Number.isInteger(at.value) && at.value <= 15;
 
-/** Checks names, numbers of values and sorts in one expression of line number `line`. */
+/** Checks names, argument counts and kinds in one expression of line number `line`. */
 export function checkExpression(names: Names, at: Expression, line: number): Kind {
   switch (at.kind) {
     case "number":

@@ -12,7 +12,7 @@ function unknownOptionNameError(
   const known = allowed.length === 0 ? "none" : allowed.join(", ");
   return new ModelError(
     "unknown-name",
-    `The option ${option} speaks of "${name}", which is no ${what} of the rule. Known: ${known}.${suggestion(name, allowed)}`,
+    `Option \`${option}\`: the rule has no ${what} "${name}". It has ${known}.${suggestion(name, allowed)}`,
     { option, name, known: allowed },
   );
 }
@@ -21,7 +21,7 @@ function optionValueError(option: string, name: string, wanted: string, given: u
   const shown = JSON.stringify(given) ?? String(given);
   return new ModelError(
     "unreadable-option",
-    `The option ${option} gives ${shown} for "${name}". Give ${wanted}.`,
+    `Option \`${option}\`: "${name}" was given as ${shown}. Give ${wanted}.`,
     { option, name, given },
   );
 }
@@ -56,14 +56,14 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
       option: "units",
       what: "name",
       names: [...states, ...quantities, ...inputs, ...parameters, "t"],
-      expected: () => 'a text such as "cells/mL"',
+      expected: () => 'a unit in quotes, such as "cells/mL"',
       accepts: (value: unknown) => typeof value === "string",
     },
     {
       option: "bounds",
       what: "state or parameter",
       names: [...states, ...parameters],
-      expected: () => "two numbers, lowest first, as in [0, Infinity]",
+      expected: () => "two numbers, the lower one first, as in [0, Infinity]",
       accepts: (value: readonly [number, number]) =>
         Array.isArray(value) && value.length === 2 && value[0] < value[1],
     },
@@ -87,8 +87,7 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
       option: "noise",
       what: "state",
       names: states,
-      expected: () =>
-        '{ distribution: "normal" | "lognormal", sd: a number or the name of a parameter of the rule }',
+      expected: () => '{ distribution: "normal" or "lognormal", sd: a number or the name of a parameter }',
       accepts: (value: { distribution?: unknown; sd?: unknown } | null) =>
         (value?.distribution === "normal" || value?.distribution === "lognormal") &&
         ((typeof value.sd === "string" && parameters.includes(value.sd)) ||
@@ -97,13 +96,13 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
   ];
 }
 
-/** Refuses options that speak of names the rule has not, or give values that fit no meaning. */
+/** Rejects options for names that the rule does not have, and values of the wrong kind. */
 export function checkOptions(rule: CheckedRule, options: RecurrenceOptions): void {
   checkName(options.name);
   for (const { option, what, names, expected, accepts } of checks(rule)) {
     for (const [name, value] of Object.entries(options[option] ?? {})) {
       if (!names.includes(name)) throw unknownOptionNameError(option, name, names, what);
-      // Each check reads what its own option may hold.
+      // Each check narrows the values of its own option.
       if (!accepts(value as never, name)) throw optionValueError(option, name, expected(name), value);
     }
   }

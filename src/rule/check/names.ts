@@ -5,7 +5,7 @@ import type { Statement } from "../syntax/expression.js";
 import type { Span } from "../syntax/token.js";
 import type { Declarations } from "./checked-rule.js";
 
-/** What the names of one rule mean, filled while its lines are read in order. */
+/** The names of one rule by role, filled while its lines are read in order. */
 export interface Names {
   readonly text: string;
   readonly states: ReadonlySet<string>;
@@ -22,40 +22,36 @@ export interface Names {
 }
 
 function setTwiceError(text: string, place: Span, name: string): Error {
-  const wrong = `"${name}" is set twice.`;
-  return ruleError("set-twice", text, place, wrong, "Keep one of the lines, or give the other another name.");
+  const wrong = `"${name}" is set by two lines.`;
+  return ruleError("set-twice", text, place, wrong, "Remove one of the lines, or use another name in it.");
 }
 
 function setDeclaredNameError(text: string, place: Span, name: string, kind: string): Error {
-  const wrong = `"${name}" is declared as ${kind}, and a line sets it.`;
+  const wrong = `"${name}" is declared as ${kind}, but this line sets it.`;
   return ruleError(
     "set-twice",
     text,
     place,
     wrong,
-    `Take it out of ${kind === "an input" ? "inputs" : "parameters"}.`,
+    `Remove it from \`${kind === "an input" ? "inputs" : "parameters"}\`.`,
   );
 }
 
 const reservedNameError = (name: string): Error =>
-  new ModelError(
-    "reserved-name",
-    `"${name}" has a meaning of its own in rules. Choose another name for it.`,
-    {
-      name,
-    },
-  );
+  new ModelError("reserved-name", `"${name}" is a reserved word of the rule language. Choose another name.`, {
+    name,
+  });
 
 const twoRolesError = (name: string): Error =>
   new ModelError(
     "two-roles",
-    `"${name}" is declared both as a parameter and as an input. Keep one of the two.`,
+    `"${name}" is listed in both \`parameters\` and \`inputs\`. Remove it from one of them.`,
     {
       name,
     },
   );
 
-/** Sorts the names that lines set into states and quantities. */
+/** Divides the names that lines set into states and quantities. */
 export function namesOf(text: string, statements: readonly Statement[], declared: Declarations): Names {
   const states = new Set<string>();
   const quantityLines = new Map<string, number>();
@@ -83,7 +79,7 @@ export function namesOf(text: string, statements: readonly Statement[], declared
   };
 }
 
-/** The refusal of a name that is none of the known ones. */
+/** The error for a name that is not declared. */
 export function undeclaredNameError(names: Names, place: Span, name: string): Error {
   const others = [...names.states, ...names.quantityLines.keys(), ...names.inputs];
   const parameters = [...(names.declared ?? [])];

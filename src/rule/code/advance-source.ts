@@ -6,10 +6,10 @@ import { lines, readArguments } from "./source-parts.js";
 const sharedByPaths: ReadonlySet<LeafRole> = new Set(["parameter", "input", "period"]);
 const fixedPerPath: ReadonlySet<LeafRole> = new Set(["input", "period"]);
 
-/** Paths that an unlimited loop takes at once: their steps overlap in the processor, and one look serves them all. */
+/** Paths stepped in one turn of the unrolled loop: their steps overlap in the processor, and one check serves all. */
 const unrollFactor = 8;
 
-/** The lines that step the path whose state vector begins at a place, between those that read and write it. */
+/** Source that steps the path whose state vector starts at `place`. */
 function stepLines(rule: RuleGraph, program: EmittedProgram, place: string): readonly string[] {
   return [
     lines(rule.states, (i) => `const s${i} = present[${place} + ${i}];`),
@@ -20,8 +20,8 @@ function stepLines(rule: RuleGraph, program: EmittedProgram, place: string): rea
 }
 
 /**
- * A loop over most paths of a rule of one value, for limits that hold everything finite. A sum that is finite says
- * that all its parts are; one that is not leaves the lot to the loop that looks at each.
+ * Unrolled loop for a rule of one state without bounds. A finite sum shows that every path of the group is finite;
+ * otherwise each is checked.
  */
 function unrolledLoop(rule: RuleGraph, program: EmittedProgram): readonly string[] {
   const step = (k: number): readonly string[] => [
@@ -45,7 +45,7 @@ function unrolledLoop(rule: RuleGraph, program: EmittedProgram): readonly string
   ];
 }
 
-/** Body of `advance(present, first, last, parameters, inputs, t, limits)`: whatever paths share stands before the loops. */
+/** Body of `advance(present, first, last, parameters, inputs, t, limits)`; what all paths share is computed before the loops. */
 export function advanceSource(rule: RuleGraph, shared: boolean): string {
   const program = emitProgram(rule.next, shared ? sharedByPaths : fixedPerPath);
   const { states, parameters, observed } = rule;

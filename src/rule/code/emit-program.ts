@@ -1,11 +1,11 @@
 import type { LeafRole, Node } from "../graph/node.js";
 import { operations } from "../graph/operations.js";
 
-/** Source for a set of nodes: what can stand before a loop, and what belongs inside it. */
+/** Source for a set of nodes, divided into loop-invariant lines and the body of the loop. */
 export interface EmittedProgram {
   readonly preamble: readonly string[];
   readonly body: readonly string[];
-  /** The expression that holds a node's value, inside the loop. */
+  /** The expression for a node's value inside the loop. */
   readonly read: (node: Node) => string;
 }
 
@@ -18,10 +18,10 @@ interface GraphUse {
   readonly ordered: Node[];
 }
 
-/** What stays the same from turn to turn of a loop over periods. */
+/** Leaves that are constant in a loop over periods. */
 const parametersOnly: ReadonlySet<LeafRole> = new Set(["parameter"]);
 
-/** Counts uses, finds which nodes change from turn to turn, and orders arguments before what uses them. */
+/** Counts uses, finds which nodes vary in the loop, and orders arguments before the nodes that use them. */
 function analyze(roots: readonly Node[], fixed: ReadonlySet<LeafRole>): GraphUse {
   const use: GraphUse = { uses: new Map(), varies: new Map(), ordered: [] };
   const visit = (node: Node): void => {
@@ -53,7 +53,7 @@ function leafSource(node: Extract<Node, { kind: "leaf" }>): string {
   return node.offset === 0 ? `u${node.slot}[t]` : `u${node.slot}[t + ${node.offset}]`.replace("+ -", "- ");
 }
 
-/** Whether a node gets a variable: it is used twice or nested deep, or leaves the loop. */
+/** Whether a node gets a variable: it is used twice, nested deeply, or loop-invariant. */
 function needsVariable(node: Node, use: GraphUse, depth: number): boolean {
   if (node.kind === "leaf") return node.role === "input";
   return node.kind === "inner" && (use.uses.get(node)! > 1 || depth > maxDepth || !use.varies.get(node)!);
@@ -61,7 +61,7 @@ function needsVariable(node: Node, use: GraphUse, depth: number): boolean {
 
 /**
  * Writes source for the roots and everything below them. Variables are `v` and the node's id; leaves must be
- * in scope as s0, c0, u0, t. `fixed` are the roles whose leaves stay the same in every turn of the loop.
+ * in scope as s0, c0, u0, t. `fixed` are the roles whose leaves are constant in the loop.
  */
 export function emitProgram(
   roots: readonly Node[],

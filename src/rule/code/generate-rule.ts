@@ -8,17 +8,17 @@ import { sensitivitySource } from "./sensitivity-source.js";
 import { stepSumsSource } from "./step-sums-source.js";
 import { sumsSource } from "./sums-source.js";
 
-/** Wider sensitivity tables would fill the registers' spill space many times over; a plain loop serves them. */
+/** Wider sensitivity tables exceed the registers many times over; the interpreter handles them. */
 const maxTableSize = 400;
 
-/** With more unknowns than this the sums no longer fit into registers, and are gathered from a table instead. */
+/** With more unknowns than this the sums no longer fit into registers, and are computed from a table instead. */
 const maxSummedUnknowns = 8;
 
-/** Functions by their source: rules that read the same share one, and its optimisation. */
+/** Functions by their source: rules with the same code share one optimised function. */
 const functionCache = new Map<string, unknown>();
 const maxCached = 500;
 
-/** Makes a function of source that holds only slots, numbers and operations of our own tables. */
+/** Compiles source that contains only slots, numbers and operations of our own tables. */
 function makeFunction<T>(parameters: string, body: string): T {
   const source = `"use strict";\nreturn (${parameters}) => {\n${body}\n};`;
   let found = functionCache.get(source);
@@ -30,7 +30,7 @@ function makeFunction<T>(parameters: string, body: string): T {
   return found as T; // the parameters and the body are those of the member that T names
 }
 
-/** Puts off the work until the function is first called; later calls go straight to it. */
+/** Defers the work to the first call and keeps its result. */
 function lazy<T>(make: () => T): () => T {
   let found: T | undefined;
   return () => {
@@ -39,7 +39,7 @@ function lazy<T>(make: () => T): () => T {
   };
 }
 
-/** The rule as generated functions, each made when first read. */
+/** The rule as generated functions, each compiled on first use. */
 export function generateRule(rule: RuleGraph): CompiledRule {
   const step = lazy(() =>
     makeFunction<CompiledRule["step"]>("state, parameters, inputs, t, next", stepSource(rule)),

@@ -20,7 +20,7 @@ function nextSensitivities(rule: RuleGraph, read: ReadNode, before: Float64Array
   }
 }
 
-/** The rule as plain loops over its graph, for places that forbid generated code. */
+/** The rule as plain loops over its graph, for hosts that forbid generated code. */
 export function interpretGraph(rule: RuleGraph): CompiledRule {
   const width = rule.states;
   const evaluateStep = graphEvaluator(rule.next);

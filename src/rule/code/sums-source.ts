@@ -4,8 +4,8 @@ import { lines, readArguments } from "./source-parts.js";
 
 /**
  * Body of `pathSums(initial, parameters, inputs, from, periods, observed, weights, sums)`: the path, its
- * sensitivities and the sums of a least-squares fit in one pass. Nothing but the sums leaves the loop, so that the
- * sums of one period are worked out while the next period's state is still on its way.
+ * sensitivities and the sums of a least-squares fit in one pass. Only the sums leave the loop, so the processor can
+ * add up one period while it computes the next.
  *
  * @param logarithmic - compares log x with what is observed, instead of x.
  */

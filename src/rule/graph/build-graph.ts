@@ -5,7 +5,7 @@ import type { Node, Operator } from "./node.js";
 import { powerOf } from "./power.js";
 import type { RuleGraph } from "./rule-graph.js";
 
-/** Every past value that the rule keeps: for each state with lags, lag 1 up to the largest it reads. */
+/** Every lagged value in the state vector: for each state with lags, lag 1 up to the largest one read. */
 export function laggedStates(rule: CheckedRule): readonly { readonly state: string; readonly lag: number }[] {
   return rule.states.flatMap((state) =>
     Array.from({ length: rule.lags.get(state) ?? 0 }, (_, index) => ({ state, lag: index + 1 })),

@@ -1,6 +1,6 @@
 import type { Node } from "./node.js";
 
-/** The roots and all below them, arguments before what uses them. */
+/** Topological order: the roots and all nodes below them, arguments first. */
 export function graphOrder(roots: readonly Node[]): readonly Node[] {
   const ordered = new Set<Node>();
   const visit = (node: Node): void => {

@@ -1,11 +1,11 @@
 import type { LeafRole, Node, Operator } from "./node.js";
 import { operations } from "./operations.js";
 
-/** Makes nodes, each once: asking again for an equal expression gives the same node. */
+/** Hash-consed nodes: an equal expression gives the same node. */
 export interface Graph {
   readonly number: (value: number) => Node;
   readonly leaf: (role: LeafRole, slot: number, offset?: number) => Node;
-  /** Folds numbers and drops what changes no value: x*1, x/1, x+0, x-0, x^1, -(-x). */
+  /** Folds constants and drops operations without effect: x*1, x/1, x+0, x-0, x^1, -(-x). */
   readonly apply: (operator: Operator, ...inside: readonly Node[]) => Node;
   readonly size: () => number;
 }
@@ -15,7 +15,7 @@ const commutative: ReadonlySet<Operator> = new Set(["add", "multiply", "min", "m
 const isNumber = (node: Node | undefined, value: number): boolean =>
   node?.kind === "number" && node.value === value;
 
-/** The number that leaves the other argument as it is. */
+/** The right identity element of an operator. */
 const identityElements: Partial<Readonly<Record<Operator, number>>> = {
   add: 0,
   subtract: 0,
@@ -24,7 +24,7 @@ const identityElements: Partial<Readonly<Record<Operator, number>>> = {
   power: 1,
 };
 
-/** The argument that the result is equal to in value, if there is one. */
+/** The argument that equals the result, if one does. */
 function simplified(operator: Operator, a: Node, b: Node | undefined): Node | undefined {
   if (operator === "negate") return a.kind === "inner" && a.operator === "negate" ? a.args[0] : undefined;
   const unit = identityElements[operator];

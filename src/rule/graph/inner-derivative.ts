@@ -3,10 +3,10 @@ import type { Node, Operator } from "./node.js";
 import { powerOf } from "./power.js";
 
 type Inner = Extract<Node, { kind: "inner" }>;
-/** Gives the derivative of `node` from those of its arguments. */
+/** The derivative of `node` from those of its arguments (chain rule). */
 type Derivative = (use: DerivativeArithmetic, node: Inner, a: Node, b: Node, c: Node) => Node;
 
-/** Derivative of one branch or the other, never a mixture: a branch not taken may be infinite. */
+/** Derivative of the branch taken, never a weighted sum: the other branch may be infinite. */
 const branch = (use: DerivativeArithmetic, condition: Node, a: Node, b: Node): Node =>
   a === b ? a : use.graph.apply("choose", condition, a, b);
 

@@ -23,7 +23,7 @@ const eitherTruth: Interval = [0, 1];
 const truthInterval = (always: boolean, never: boolean): Interval =>
   always ? trueInterval : never ? falseInterval : eitherTruth;
 
-/** Image under a rising function that has values from zero on only. */
+/** Image under an increasing function that is defined from zero on. */
 const onNonNegative =
   (of: (x: number) => number): IntervalOperation =>
   ([low, high]) =>
@@ -50,21 +50,21 @@ const power: IntervalOperation = (base, exponent) => {
     positive[0] ** high,
     positive[1] ** low,
     positive[1] ** high,
-    // 1 and 0 are where the power turns from falling to rising.
+    // The power changes from decreasing to increasing at 1 and 0.
     ...(positive[0] < 1 && positive[1] > 1 ? [1] : []),
     ...(low < 0 && high > 0 ? [1] : []),
   ].filter((value) => !Number.isNaN(value));
   return roundOutward(Math.min(...corners), Math.max(...corners));
 };
 
-/** Whether place + a whole number of turns lies in the interval, or so close that rounding cannot tell. */
+/** Whether place + a multiple of 2 pi lies in the interval, up to rounding. */
 function reachesPhase(place: number, [low, high]: Interval): boolean {
   const turn = 2 * Math.PI;
   const slack = 1e-9 * Math.max(1, Math.abs(low), Math.abs(high));
   return Math.ceil((low - slack - place) / turn) * turn + place <= high + slack;
 }
 
-/** Sine or cosine, which is 1 at the peak and -1 half a turn from it. */
+/** Sine or cosine, which is 1 at the peak and -1 at pi from it. */
 const sinusoid =
   (of: (x: number) => number, peak: number): IntervalOperation =>
   ([low, high]) => {
@@ -82,7 +82,7 @@ const tan: IntervalOperation = ([low, high]) => {
 const mod: IntervalOperation = (x, divisor) =>
   contains(divisor, 0) ? wholeLine : minus(x, times(divisor, increasing(Math.floor, dividedBy(x, divisor))));
 
-/** Enclosures of every operation: the result holds the value at each point of the arguments. */
+/** Interval extension of every operation: the result contains the value at each point of the arguments. */
 export const intervalOperations: Readonly<Record<Operator, IntervalOperation>> = {
   add: plus,
   subtract: minus,

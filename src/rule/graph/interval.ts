@@ -1,10 +1,10 @@
-/** All numbers from low to high; NaN in both when an operation has no value anywhere in it. */
+/** All numbers from low to high; NaN in both when an operation is undefined on the whole interval. */
 export type Interval = readonly [low: number, high: number];
 
 export const emptyInterval: Interval = [Number.NaN, Number.NaN];
 export const wholeLine: Interval = [Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY];
 
-/** Widens by a few units in the last place, so that rounding never loses a value. */
+/** Outward rounding: widens by a few units in the last place, so that no value is lost. */
 export const roundOutward = (low: number, high: number): Interval => [
   Number.isFinite(low) ? low - Math.abs(low) * 4 * Number.EPSILON - Number.MIN_VALUE : low,
   Number.isFinite(high) ? high + Math.abs(high) * 4 * Number.EPSILON + Number.MIN_VALUE : high,
@@ -27,7 +27,7 @@ export function dividedBy(above: Interval, [c, d]: Interval): Interval {
   return times(above, ends);
 }
 
-/** An infinite end less an infinite end may be anything; no value at all stays none. */
+/** Infinity minus infinity may be anything; an empty interval stays empty. */
 const settled = (low: number, high: number, none: boolean): Interval => {
   if (none) return emptyInterval;
   return roundOutward(
@@ -46,6 +46,6 @@ export const hull = ([a, b]: Interval, [c, d]: Interval): Interval => {
 };
 export const contains = ([low, high]: Interval, value: number): boolean => low <= value && value <= high;
 
-/** Image under a function that never falls. */
+/** Image under a nondecreasing function. */
 export const increasing = (of: (x: number) => number, [a, b]: Interval): Interval =>
   roundOutward(of(a), of(b));

@@ -8,7 +8,7 @@ interface Operation {
 
 /**
  * Rounds to decimal digits, halves away from zero. A value within two units of its last binary place of a half
- * counts as a half, because most decimal halves have no exact binary form.
+ * is treated as a half, because most decimal halves have no exact binary form.
  */
 export function roundTo(x: number, digits: number): number {
   const scale = 10 ** digits;

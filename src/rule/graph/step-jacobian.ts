@@ -4,7 +4,7 @@ import type { RuleGraph } from "./rule-graph.js";
 
 /** Partial derivatives of one step. */
 export interface StepJacobian {
-  /** [slot][slot]: next value of the first by present value of the second. */
+  /** [slot][slot]: next value of the first by the present value of the second. */
   readonly byState: readonly (readonly Node[])[];
   /** [slot][parameter] */
   readonly byParameter: readonly (readonly Node[])[];
@@ -12,7 +12,7 @@ export interface StepJacobian {
 
 const cache = new WeakMap<RuleGraph, StepJacobian>();
 
-/** All partial derivatives of one step of a rule, worked out once. */
+/** All partial derivatives of one step of a rule, cached. */
 export function stepJacobian(rule: RuleGraph): StepJacobian {
   let found = cache.get(rule);
   if (found === undefined) {

@@ -15,12 +15,12 @@ function rejectChainedComparison(reader: TokenReader, operator: Token): void {
     "chained-comparison",
     reader.text,
     reader.peek(),
-    "A comparison joins two values, and this is a third.",
+    "Comparisons cannot be chained.",
     "Join two comparisons with and, as in 0 < N and N < K.",
   );
 }
 
-/** Refuses what can only be a product or a stray sign after a complete value. */
+/** Rejects what can only be a product without its sign, or a stray symbol, after a complete value. */
 function rejectImpliedProduct(reader: TokenReader, left: Expression): void {
   const next = reader.peek();
   const opens = next.kind === "sign" && (next.text === "(" || next.text === "Δ");
@@ -32,7 +32,7 @@ function rejectImpliedProduct(reader: TokenReader, left: Expression): void {
   throw missingOperatorError(reader.text, { start: left.end, end: next.end }, last.slice(-30), right);
 }
 
-/** Reads one expression whose joining signs all bind at least as closely as `least`. */
+/** Reads one expression whose operators all bind at least as tightly as `least`. */
 export function parseExpression(reader: TokenReader, minPrecedence = 1): Expression {
   return reader.nested(() => {
     let left = parseOperand(reader, parseExpression);
@@ -49,7 +49,7 @@ export function parseExpression(reader: TokenReader, minPrecedence = 1): Express
   });
 }
 
-/** Reads a joining sign and what stands to its right. `^` groups to the right, all others to the left. */
+/** Reads a binary operator and its right operand. `^` groups to the right, all others to the left. */
 function parseRest(reader: TokenReader, left: Expression): Expression {
   const operator = reader.take();
   const own = binaryPrecedence(operator);
@@ -59,7 +59,7 @@ function parseRest(reader: TokenReader, left: Expression): Expression {
       reader.text,
       operator,
       `A value is missing after "${operator.text}", ${placeBefore(reader.peek())}.`,
-      "Write the value, or take the sign away.",
+      "Add the value, or remove the operator.",
     );
   }
   const right = parseExpression(reader, operator.text === "^" ? own : own + 1);

@@ -2,7 +2,8 @@ import { ruleError } from "../errors.js";
 import type { Token } from "./token.js";
 import type { TokenReader } from "./token-reader.js";
 
-const form = "Write the present value as N or N[t], a past one as N[t-1], N[t-2], the next as N[t+1].";
+const form =
+  "Write N or N[t] for the present value, N[t-1] or N[t-2] for a past one, and N[t+1] for the next.";
 
 /** Reads what may follow a name in square brackets: [t], [t+1], [t-2]. Nothing means the present. */
 export function parseOffset(reader: TokenReader, name: Token): { offset: number; end: number } {
@@ -10,7 +11,7 @@ export function parseOffset(reader: TokenReader, name: Token): { offset: number;
   if (!reader.accept("[")) return { offset: 0, end: name.end };
   const index = reader.take();
   if (index.kind !== "name" || index.text !== "t") {
-    const wrong = `The period of "${name.text}" must be counted from t.`;
+    const wrong = `The index of "${name.text}" must be t, t+1, t-1 and so on.`;
     throw ruleError("unreadable-period", reader.text, { start: open.start, end: index.end }, wrong, form);
   }
   const offset = parseSteps(reader, name);
@@ -27,7 +28,7 @@ function parseSteps(reader: TokenReader, name: Token): number {
     "unreadable-period",
     reader.text,
     steps,
-    `The number of periods after "${name.text}[t" must be a whole number.`,
+    `The offset in the index of "${name.text}" must be a whole number.`,
     form,
   );
 }

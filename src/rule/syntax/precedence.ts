@@ -1,6 +1,6 @@
 import type { Token } from "./token.js";
 
-/** Binding strength; a larger number binds closer. Unary minus stands between * and ^, `not` above `and`. */
+/** Operator precedence; a larger number binds tighter. Unary minus lies between * and ^, `not` above `and`. */
 export const precedence: ReadonlyMap<string, number> = new Map([
   ["or", 1],
   ["and", 2],
@@ -20,6 +20,6 @@ export const unaryMinusPrecedence = 7;
 export const notPrecedence = 3;
 export const comparisonPrecedence = 4;
 
-/** The strength with which a token joins what stands left of it; 0 if it joins nothing. */
+/** Precedence of a token as a binary operator; 0 if it is none. */
 export const binaryPrecedence = (token: Token): number =>
   token.kind === "sign" || token.kind === "name" ? (precedence.get(token.text) ?? 0) : 0;

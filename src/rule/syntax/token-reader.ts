@@ -2,30 +2,30 @@ import { ruleError, tooLargeError } from "../errors.js";
 import { readTokens } from "./read-tokens.js";
 import type { Span, Token } from "./token.js";
 
-/** Limits that keep a hostile or runaway text from taking time or stack. */
+/** Limits that protect time and stack against hostile or runaway texts. */
 export const limits: { readonly letters: number; readonly depth: number; readonly nodes: number } = {
   letters: 20_000,
   depth: 100,
   nodes: 5_000,
 };
 
-/** The tokens of one rule with a current position, and counts held to the limits. */
+/** The tokens of one rule with a current position; counts are checked against the limits. */
 export interface TokenReader {
   readonly text: string;
   readonly peek: (ahead?: number) => Token;
   readonly take: () => Token;
-  /** Takes the sign if it comes next. */
+  /** Takes the symbol if it comes next. */
   readonly accept: (sign: string) => boolean;
   readonly expect: (sign: string, remedy: string) => Token;
-  /** Counts one more part of the rule, at the place. */
+  /** Counts one more term or operator, at the place. */
   readonly count: (place: Span) => void;
-  /** Runs the reading of a nested part, refused when nested too deeply. */
+  /** Reads a nested part; throws when nested too deeply. */
   readonly nested: <T>(read: () => T) => T;
 }
 
 function limitedTokens(text: string): readonly Token[] {
   if (text.length > limits.letters) {
-    throw tooLargeError("letters", limits.letters, text.length, text, {
+    throw tooLargeError("characters", limits.letters, text.length, text, {
       start: limits.letters,
       end: limits.letters + 1,
     });
@@ -53,11 +53,11 @@ export function tokenReader(text: string): TokenReader {
     expect: (sign, remedy) => {
       if (isNext(sign)) return take();
       const found = peek();
-      throw ruleError("missing-sign", text, found, `A "${sign}" is missing ${placeBefore(found)}.`, remedy);
+      throw ruleError("missing-sign", text, found, `"${sign}" is missing ${placeBefore(found)}.`, remedy);
     },
     count: (place) => {
       nodes++;
-      if (nodes > limits.nodes) throw tooLargeError("parts", limits.nodes, nodes, text, place);
+      if (nodes > limits.nodes) throw tooLargeError("terms and operators", limits.nodes, nodes, text, place);
     },
     nested: (read) => {
       depth++;
@@ -69,7 +69,7 @@ export function tokenReader(text: string): TokenReader {
   };
 }
 
-/** How a message names the place in front of a token. */
+/** How a message names the position in front of a token. */
 export function placeBefore(token: Token): string {
   if (token.kind === "end") return "at the end of the rule";
   if (token.kind === "newline") return "at the end of the line";

@@ -2,7 +2,7 @@ import type { BinaryOperator, Expression } from "../syntax/expression.js";
 import { notPrecedence, precedence, unaryMinusPrecedence } from "../syntax/precedence.js";
 import { texNumber } from "./tex-number.js";
 
-/** How names are set: a symbol with its period, or a fitted number. */
+/** Typesets a name: a symbol with its period, or a fitted number. */
 export type SetName = (name: string, offset: number) => string;
 
 const signs: Partial<Readonly<Record<BinaryOperator, string>>> = {
@@ -31,7 +31,7 @@ function grouped(at: Expression, minPrecedence: number, name: SetName): string {
   return precedenceOf(at, set) < minPrecedence ? bracketed(set) : set;
 }
 
-/** Products are set side by side; a dot keeps a number from running into what stands before it. */
+/** Products are written side by side; a dot separates a number from the factor before it. */
 const product = (left: string, right: string): string =>
   /^[\d.]/u.test(right) ? `${left} \\cdot ${right}` : `${left}\\,${right}`;
 

@@ -9,11 +9,11 @@ import {
   sameUnit,
   timeUnitsIn,
   type Unit,
+  unitPhrase,
   unitPower,
-  unitText,
 } from "./unit.js";
 
-/** `any` is a bare number, which fits every unit in a sum and is a pure number in a product. */
+/** `any` is a bare number, which takes any unit in a sum and is dimensionless in a product. */
 type UnitOrUnknown = Unit | "any" | "unknown";
 
 interface UnitCheck {
@@ -23,7 +23,7 @@ interface UnitCheck {
 
 const isKnown = (unit: UnitOrUnknown): unit is Unit => typeof unit !== "string";
 
-/** The unit of things that must be of one unit, as in a sum; notes the first two that are not. */
+/** The unit shared by parts that must have one, as in a sum; notes the first two that differ. */
 function commonUnit(check: UnitCheck, parts: readonly Expression[], what: string): UnitOrUnknown {
   const units = parts.map((part) => ({ part, unit: unitOfExpression(check, part) }));
   const known = units.flatMap(({ part, unit }) => (isKnown(unit) ? [{ part, unit }] : []));
@@ -31,7 +31,7 @@ function commonUnit(check: UnitCheck, parts: readonly Expression[], what: string
   const odd = first && known.find(({ unit }) => !sameUnit(unit, first.unit));
   if (first !== undefined && odd !== undefined) {
     check.note(
-      `${what} joins ${expressionText(first.part)} in ${unitText(first.unit)} with ${expressionText(odd.part)} in ${unitText(odd.unit)}.`,
+      `${what} combines different units: ${expressionText(first.part)} has ${unitPhrase(first.unit)}, ${expressionText(odd.part)} has ${unitPhrase(odd.unit)}.`,
     );
   }
   return first?.unit ?? (units.every(({ unit }) => unit === "any") ? "any" : "unknown");
@@ -40,9 +40,7 @@ function commonUnit(check: UnitCheck, parts: readonly Expression[], what: string
 function requireDimensionless(check: UnitCheck, part: Expression, what: string): void {
   const unit = unitOfExpression(check, part);
   if (isKnown(unit) && !sameUnit(unit, noUnit)) {
-    check.note(
-      `${what} is taken of ${expressionText(part)}, which has the unit ${unitText(unit)}; only a pure number has one.`,
-    );
+    check.note(`${what} must be dimensionless, but ${expressionText(part)} has ${unitPhrase(unit)}.`);
   }
 }
 
@@ -54,7 +52,7 @@ function productOf(left: UnitOrUnknown, right: UnitOrUnknown, power: number): Un
 
 function powerOf(check: UnitCheck, base: Expression, exponent: Expression): UnitOrUnknown {
   const unit = unitOfExpression(check, base);
-  requireDimensionless(check, exponent, "A power");
+  requireDimensionless(check, exponent, "An exponent");
   if (!isKnown(unit)) return unit;
   if (exponent.kind === "number") return unitPower(unit, exponent.value);
   return sameUnit(unit, noUnit) ? noUnit : "unknown";
@@ -90,7 +88,7 @@ function unitOfCall(check: UnitCheck, at: Extract<Expression, { kind: "call" }>)
   }
   if (name === "abs" || name === "round" || name === "floor" || name === "ceil")
     return unitOfExpression(check, args[0]!);
-  if (name !== "sign") requireDimensionless(check, args[0]!, name);
+  if (name !== "sign") requireDimensionless(check, args[0]!, `The argument of ${name}`);
   return noUnit;
 }
 
@@ -117,30 +115,31 @@ function mixedTimeUnits(units: Readonly<Record<string, string>>): readonly strin
   const odd = named.find(({ period }) => period !== first?.period);
   if (first === undefined || odd === undefined) return [];
   return [
-    `"${first.name}" is stated per ${first.period} and "${odd.name}" per ${odd.period}; a step is one period, so convert one of them by compounding.`,
+    `"${first.name}" is per ${first.period} and "${odd.name}" per ${odd.period}, but a step is one period. Convert one of them by compounding.`,
   ];
 }
 
-/** What can be seen to be wrong with the units of a rule. A name without a unit is never at odds with another. */
+const remedy = "Correct the units or the rule.";
+
+/** Inconsistent units of a rule. A name without a unit agrees with every other. */
 export function unitFindings(rule: CheckedRule, units: Readonly<Record<string, string>>): readonly Warning[] {
   if (Object.keys(units).length === 0) return [];
-  const messages = mixedTimeUnits(units).slice();
+  const messages: string[] = [...mixedTimeUnits(units)];
   const known = new Map<string, UnitOrUnknown>();
   for (const [name, text] of Object.entries(units)) if (text !== "") known.set(name, parseUnit(text));
   const check: UnitCheck = {
     unitOf: (name) => (name === "t" ? "any" : (known.get(name) ?? "unknown")),
-    note: (message) => messages.push(message),
+    note: (message) => messages.push(`${message} ${remedy}`),
   };
   for (const { name, expression } of rule.statements) {
     const unit = unitOfExpression(check, expression);
     const own = known.get(name);
     if (own === undefined) known.set(name, unit);
     else if (isKnown(own) && isKnown(unit) && !sameUnit(own, unit)) {
-      messages.push(`The line of "${name}", stated in ${unitText(own)}, comes out in ${unitText(unit)}.`);
+      messages.push(
+        `The right-hand side of "${name}" has ${unitPhrase(unit)}, but ${name} has ${unitPhrase(own)}. ${remedy}`,
+      );
     }
   }
-  return messages.map((message) => ({
-    code: "units-disagree",
-    message: `${message} Correct the unit, or the rule.`,
-  }));
+  return messages.map((message) => ({ code: "units-disagree", message }));
 }

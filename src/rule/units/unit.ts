@@ -1,7 +1,7 @@
-/** Powers of basic units; an empty map is a pure number. */
+/** Powers of basic units; an empty map is dimensionless. */
 export type Unit = ReadonlyMap<string, number>;
 
-/** Lengths of a period: a step is one period, so they cancel in a rule and are compared with each other only. */
+/** Time units: a step is one period, so they cancel in a rule and are compared with each other only. */
 const timeUnits: ReadonlySet<string> = new Set([
   "second",
   "s",
@@ -30,7 +30,7 @@ function multiplyInto(into: Map<string, number>, word: string, power: number): v
 }
 
 /**
- * Reads a unit such as "cells/mL", "1/month", "10^4 cells/mL", "kg per ha": factors joined by blanks, * or /,
+ * Reads a unit such as "cells/mL", "1/month", "10^4 cells/mL", "kg per ha": factors separated by spaces, * or /,
  * each with a whole power. A scale such as 10^4 or 1000 is a factor like a word.
  */
 export function parseUnit(text: string): Unit {
@@ -61,11 +61,11 @@ export function multiplyUnits(a: Unit, b: Unit, power: number): Unit {
 
 export const unitPower = (unit: Unit, power: number): Unit => multiplyUnits(noUnit, unit, power);
 
-/** The part of a unit that is not the length of a period. */
+/** A unit without its time units. */
 export const withoutTimeUnits = (unit: Unit): Unit =>
   new Map([...unit].filter(([word]) => !timeUnits.has(word)));
 
-/** The lengths of a period that a unit speaks of. */
+/** The time units in a unit. */
 export const timeUnitsIn = (unit: Unit): readonly string[] =>
   [...unit.keys()].filter((word) => timeUnits.has(word));
 
@@ -77,10 +77,14 @@ export const sameUnit = (a: Unit, b: Unit): boolean => {
 
 const powered = (word: string, power: number): string => (power === 1 ? word : `${word}^${power}`);
 
-/** A unit as text: what is multiplied, then what is divided by. */
-export function unitText(unit: Unit): string {
+/** "the unit cells/mL", or "no unit". */
+export const unitPhrase = (unit: Unit): string =>
+  unit.size === 0 ? "no unit" : `the unit ${unitText(unit)}`;
+
+/** A unit as text: numerator, then denominator. */
+function unitText(unit: Unit): string {
   const above = [...unit].filter(([, power]) => power > 0).map(([word, power]) => powered(word, power));
   const below = [...unit].filter(([, power]) => power < 0).map(([word, power]) => powered(word, -power));
-  if (below.length === 0) return above.length === 0 ? "a pure number" : above.join(" ");
+  if (below.length === 0) return above.join(" ");
   return `${above.length === 0 ? "1" : above.join(" ")}/${below.join("/")}`;
 }
