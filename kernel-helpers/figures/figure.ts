@@ -19,7 +19,10 @@ export interface Axis {
   /** Ends of the axis, in its unit; default what the layers need. */
   readonly ends?: readonly [number, number];
   /** The periods that places on the axis stand for, where these have labels; `zero` is the place of period 0. */
-  readonly periods?: { readonly axis: PeriodAxis; readonly zero: number };
+  readonly periods?: {
+    readonly axis: PeriodAxis;
+    readonly zero: number;
+  };
   /**
    * Whether it has no ticks and grid: where places along the axis have no meaning of their own; default
    * false.

@@ -45,30 +45,31 @@ type AskFreely<Options, Result> = <Asked extends Subject>(
   options?: OptionsFor<Asked, Options>,
 ) => ResultFor<Asked, Result>;
 
-const question =
+const asking =
   <Options, Result extends object>(about: Question<Result>): AskFreely<Options, Result> =>
   <Asked extends Subject>(...given: readonly [Asked, OptionsFor<Asked, Options>?]) =>
     asked(about, given) as ResultFor<Asked, Result>;
 
 /** The answer, which shows itself; that of a fit says which estimates were taken. */
 function asked<Result extends object>(
-  { name, ask, show, bring }: Question<Result>,
+  { name: question, ask, show, bring }: Question<Result>,
   given: readonly unknown[],
 ): object {
   const [subject, options = {}, ...more] = given as readonly [Subject, Given?, ...unknown[]];
   if (subject?.kind !== "fit" || typeof options !== "object" || options === null) {
-    checkCall(name, given);
+    checkCall(question, given);
     const result = ask(subject as Rule, frozenCopy(options) as never);
     return showing(result, () => shownTogether(show(result)));
   }
-  const group = groupOf(subject, options["group"] as string | undefined);
-  const own = options["parameters"] ?? {};
+  const { group: name } = options;
+  const group = groupOf(subject, typeof name === "string" ? name : undefined);
+  const { parameters: own = {} } = options;
   const all = {
     ...bring?.(subject, group, options),
     ...options,
     parameters: typeof own === "object" ? { ...group.parameters, ...own } : own,
   };
-  checkCall(name, [subject, all, ...more]);
+  checkCall(question, [subject, all, ...more]);
   const notes = fitNotes(subject, group);
   const result = { ...ask(subject.rule, frozenCopy(all) as never), fit: subject, notes };
   return showing(result, () => shownTogether([...show(result), shownNotes(notes)]));
@@ -83,7 +84,7 @@ const withInitial = (fit: Fit, group: GroupFit): Given => ({ initial: fittedInit
  * @throws {ModelError} where a parameter, a first value or an input is missing.
  * @example trajectory(recurrence("N[t+1] = R*N"), { parameters: { R: 2 }, initial: { N: 3 }, periods: 2 }).values.N; // [3, 6, 12]
  */
-export const trajectory: Ask<engine.TrajectoryOptions, engine.Trajectory> = question({
+export const trajectory: Ask<engine.TrajectoryOptions, engine.Trajectory> = asking({
   name: "trajectory",
   ask: engine.trajectory,
   show: steps.showPath,
@@ -101,7 +102,7 @@ export const trajectory: Ask<engine.TrajectoryOptions, engine.Trajectory> = ques
  * @throws {ModelError} `no-rational-value` where a function has no exact value.
  * @example exactTrajectory(recurrence("F[t+1] = F + F[t-1]"), { initial: { F: [0, 1] }, periods: 29 }).values.F[29]; // "832040"
  */
-export const exactTrajectory: Ask<engine.ExactTrajectoryOptions, engine.ExactTrajectory> = question({
+export const exactTrajectory: Ask<engine.ExactTrajectoryOptions, engine.ExactTrajectory> = asking({
   name: "exactTrajectory",
   ask: engine.exactTrajectory,
   show: steps.showExactPath,
@@ -115,7 +116,7 @@ export const exactTrajectory: Ask<engine.ExactTrajectoryOptions, engine.ExactTra
  * @throws {ModelError} `no-closed-form` | `outside-range`.
  * @example closedForm(rules.affine(), { parameters: { a: 0.5, b: 1 }, initial: { x: 0 } }).method; // "named"
  */
-export const closedForm: AskFreely<engine.ClosedFormOptions, engine.ClosedForm> = question({
+export const closedForm: AskFreely<engine.ClosedFormOptions, engine.ClosedForm> = asking({
   name: "closedForm",
   ask: engine.closedForm,
   show: steps.showClosedForm,
@@ -127,7 +128,7 @@ export const closedForm: AskFreely<engine.ClosedFormOptions, engine.ClosedForm> 
  *
  * @example equilibria(recurrence("ΔN = r*N*(1 - N/K)"), { parameters: { r: 0.5, K: 1000 } }).points.length; // 2
  */
-export const equilibria: AskFreely<engine.EquilibriaOptions, engine.Equilibria> = question({
+export const equilibria: AskFreely<engine.EquilibriaOptions, engine.Equilibria> = asking({
   name: "equilibria",
   ask: engine.equilibria,
   show: long.showEquilibria,
@@ -138,7 +139,7 @@ export const equilibria: AskFreely<engine.EquilibriaOptions, engine.Equilibria> 
  *
  * @example cycles(recurrence("x[t+1] = 3.2*x*(1 - x)"), { period: 2, range: [0, 1] }).cycles.length; // 1
  */
-export const cycles: Ask<engine.CyclesOptions, engine.Cycles> = question({
+export const cycles: Ask<engine.CyclesOptions, engine.Cycles> = asking({
   name: "cycles",
   ask: engine.cycles,
   show: long.showCycles,
@@ -149,7 +150,7 @@ export const cycles: Ask<engine.CyclesOptions, engine.Cycles> = question({
  *
  * @example bifurcations(recurrence("x[t+1] = r*x*(1 - x)"), { vary: "r", range: [2.8, 3.3], initial: 0.3 }).places[0].kind; // "flip"
  */
-export const bifurcations: Ask<engine.BifurcationsOptions, engine.Bifurcations> = question({
+export const bifurcations: Ask<engine.BifurcationsOptions, engine.Bifurcations> = asking({
   name: "bifurcations",
   ask: engine.bifurcations,
   show: long.showBifurcations,
@@ -162,7 +163,7 @@ export const bifurcations: Ask<engine.BifurcationsOptions, engine.Bifurcations> 
  *
  * @example lyapunovExponent(recurrence("x[t+1] = 2.5*x*(1 - x)"), { initial: { x: 0.3 }, periods: 3000 }).verdict; // "not chaotic"
  */
-export const lyapunovExponent: AskFreely<engine.LyapunovExponentOptions, engine.LyapunovExponent> = question({
+export const lyapunovExponent: AskFreely<engine.LyapunovExponentOptions, engine.LyapunovExponent> = asking({
   name: "lyapunovExponent",
   ask: (rule: Rule, own: engine.LyapunovExponentOptions): engine.LyapunovExponent =>
     runShown("Lyapunov exponent", own, (shown) => engine.lyapunovExponent(rule, shown)),
@@ -175,7 +176,7 @@ export const lyapunovExponent: AskFreely<engine.LyapunovExponentOptions, engine.
  *
  * @example predictionHorizon(recurrence("x[t+1] = 2.5*x*(1 - x)"), { initial: { x: 0.3 }, error: 0.001, tolerance: 0.1 }).periods; // Infinity
  */
-export const predictionHorizon: Ask<engine.PredictionHorizonOptions, engine.PredictionHorizon> = question({
+export const predictionHorizon: Ask<engine.PredictionHorizonOptions, engine.PredictionHorizon> = asking({
   name: "predictionHorizon",
   ask: (rule: Rule, own: engine.PredictionHorizonOptions): engine.PredictionHorizon =>
     runShown("Prediction horizon", own, (shown) => engine.predictionHorizon(rule, shown)),
@@ -189,7 +190,7 @@ export const predictionHorizon: Ask<engine.PredictionHorizonOptions, engine.Pred
  *
  * @example attractor(recurrence("x[t+1] = r*x*(1 - x)"), { vary: "r", values: [2, 3, 4], periods: 2, initial: 0.3 }).perColumn; // 2
  */
-export const attractor: Ask<engine.AttractorOptions, engine.Attractor> = question({
+export const attractor: Ask<engine.AttractorOptions, engine.Attractor> = asking({
   name: "attractor",
   ask: (rule: Rule, own: engine.AttractorOptions): engine.Attractor =>
     runShown("Attractor", own, (shown) => engine.attractor(rule, shown)),
@@ -202,7 +203,7 @@ export const attractor: Ask<engine.AttractorOptions, engine.Attractor> = questio
  *
  * @example cobweb(recurrence("x[t+1] = 0.5*x + 1"), { initial: { x: 0 }, periods: 2 }).web.y; // [0, 1, 1, 1.5, 1.5]
  */
-export const cobweb: Ask<engine.CobwebOptions, engine.Cobweb> = question({
+export const cobweb: Ask<engine.CobwebOptions, engine.Cobweb> = asking({
   name: "cobweb",
   ask: engine.cobweb,
   show: long.showCobweb,
@@ -214,7 +215,7 @@ export const cobweb: Ask<engine.CobwebOptions, engine.Cobweb> = question({
  *
  * @example basins(rules.allee(), { parameters: { r: 0.2, K: 100, A: 20 }, range: [0, 110] }).borders.length; // 1
  */
-export const basins: Ask<engine.BasinsOptions, engine.Basins> = question({
+export const basins: Ask<engine.BasinsOptions, engine.Basins> = asking({
   name: "basins",
   ask: (rule: Rule, own: engine.BasinsOptions): engine.Basins =>
     runShown("Basins", own, (shown) => engine.basins(rule, shown)),
@@ -226,7 +227,7 @@ export const basins: Ask<engine.BasinsOptions, engine.Basins> = question({
  *
  * @example matrixGrowth(rules.ages({ ages: 3 }), { parameters: { f1: 0, f2: 4, f3: 3, s1: 0.5, s2: 0.25 } }).dominant; // 1.5
  */
-export const matrixGrowth: AskFreely<engine.HeldSetting, engine.MatrixGrowth> = question({
+export const matrixGrowth: AskFreely<engine.HeldSetting, engine.MatrixGrowth> = asking({
   name: "matrixGrowth",
   ask: engine.matrixGrowth,
   show: steps.showMatrixGrowth,

@@ -72,8 +72,16 @@ const leastSquaresProblem: Schema<LeastSquaresProblem> = {
     "central differences",
   ),
   start: required(numbers("[1]", 1), "Values of the parameters where the search begins"),
-  lower: optional(numbers("[0]"), "Lowest admitted values", "no limit"),
-  upper: optional(numbers("[10]"), "Highest admitted values", "no limit"),
+  lower: optional(
+    numbers("[0]"),
+    "Lowest admitted values; a parameter with equal limits is held there",
+    "no limit",
+  ),
+  upper: optional(
+    numbers("[10]"),
+    "Highest admitted values; a parameter with equal limits is held there",
+    "no limit",
+  ),
   scale: optional(
     numbers("[1]"),
     "Typical size of each parameter, for difference steps about 0",

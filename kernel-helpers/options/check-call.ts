@@ -12,7 +12,7 @@ import {
 import type { Argument, FunctionSchema, Size } from "./function-schema.js";
 import { functions } from "./functions.js";
 import { namesOf } from "./rule-names.js";
-import { isPlain } from "./written.js";
+import { isPlain, typed } from "./written.js";
 
 /**
  * Checks what a public function was given against its schema; every such function begins with it.
@@ -54,7 +54,7 @@ function checkOptions(schema: FunctionSchema, given: readonly unknown[]): void {
   const { takes, options: shape, instead, sizes = [] } = schema;
   const value = given[takes.length];
   if (value !== undefined && instead !== undefined && faultOf(instead, value, []) === undefined) return;
-  if (value !== undefined && !isPlain(value)) throw noOptionsError(schema, value);
+  if (value !== undefined && (!isPlain(value) || isResult(value))) throw noOptionsError(schema, value);
   const options = value ?? {};
   const subject = (given[0] as { kind?: unknown } | undefined)?.kind;
   for (const [name, { of }] of Object.entries(shape!.fields))
@@ -63,6 +63,9 @@ function checkOptions(schema: FunctionSchema, given: readonly unknown[]): void {
   if (fault !== undefined) throw optionError(fault, schema, options);
   for (const size of sizes) checkSize(size, options, given);
 }
+
+/** A result has a kind as well, but is more than anyone types. */
+const isResult = (value: object): boolean => isOf("result", value) && typed(value) === undefined;
 
 function checkSize(
   { option, bytes }: Size,

@@ -26,9 +26,25 @@ export function faultOf(
   names: Names = () => undefined,
 ): Fault | undefined {
   const one: AnyCase = { kind, example, value, path, names };
-  if (!accepts(kind, value)) return wrong(one, meantNumber(kind, value) ?? code(example));
+  if (!accepts(kind, value)) return wrong(one, meantNumber(kind, value) ?? exampleIn(one, names));
   const check = checks[kind.is] as ((one: AnyCase) => Fault | undefined) | undefined;
   return check?.(one);
+}
+
+/** An example that speaks of the rule of the call; undefined where the rule has nothing of the kind. */
+function exampleIn({ kind, example }: Described, names: Names): unknown {
+  if (kind.is === "list") {
+    const inner = exampleIn(kind.of, names);
+    return kind.of.kind.is === "text" && kind.of.kind.names ? [inner] : code(example);
+  }
+  if (kind.is === "measures")
+    return code(example.replace('"N"', JSON.stringify(names("measured")?.[0] ?? "N")));
+  const role = kind.is === "named" || kind.is === "text" ? kind.names : undefined;
+  const known = role && names(role);
+  if (known === undefined) return code(example);
+  const [first] = known;
+  if (first === undefined) return undefined;
+  return kind.is === "named" ? { [first]: exampleIn(kind.of, names) } : first;
 }
 
 /** The first thing that is wrong with an object of options. */
@@ -44,9 +60,9 @@ export function shapeFault(
     return { kind: "unknown", path, name: stranger[0], value: stranger[1], known: fields };
   const present = given.map(([name]) => name);
   return (
-    first(oneOf, (group) => oneOfFault(group, present, fields, path)) ??
+    first(oneOf, (group) => oneOfFault(group, present, fields, path, names)) ??
     first(given, ([name, own]) => faultOf(fields[name]!, own, [...path, name], names)) ??
-    missingFault(fields, present, path)
+    missingFault(fields, present, path, names)
   );
 }
 
@@ -60,23 +76,35 @@ const first = <T>(items: readonly T[], of: (item: T) => Fault | undefined): Faul
 
 function oneOfFault(
   group: readonly string[],
-  names: readonly string[],
+  present: readonly string[],
   fields: Fields,
   path: Path,
+  names: Names,
 ): Fault | undefined {
-  const given = group.filter((name) => names.includes(name));
+  const given = group.filter((name) => present.includes(name));
   if (given.length === 1) return undefined;
   if (given.length > 1) return { kind: "both", path, names: given };
-  return { kind: "missing", path, fields: only(fields, group) };
+  return missing(group, fields, path, names);
 }
 
-function missingFault(fields: Fields, names: readonly string[], path: Path): Fault | undefined {
-  const name = Object.keys(fields).find((each) => fields[each]!.need === "required" && !names.includes(each));
-  return name === undefined ? undefined : { kind: "missing", path, fields: only(fields, [name]) };
+function missingFault(
+  fields: Fields,
+  present: readonly string[],
+  path: Path,
+  names: Names,
+): Fault | undefined {
+  const name = Object.keys(fields).find(
+    (each) => fields[each]!.need === "required" && !present.includes(each),
+  );
+  return name === undefined ? undefined : missing([name], fields, path, names);
 }
 
-const only = (fields: Fields, names: readonly string[]): Record<string, Field> =>
-  Object.fromEntries(names.map((name) => [name, fields[name]!]));
+const missing = (group: readonly string[], fields: Fields, path: Path, names: Names): Fault => ({
+  kind: "missing",
+  path,
+  fields: Object.fromEntries(group.map((name) => [name, fields[name]!])),
+  instead: exampleIn(fields[group[0]!]!, names),
+});
 
 const wrong = ({ kind, value, path }: AnyCase, instead: unknown): Fault => ({
   kind: "wrong",
@@ -155,7 +183,7 @@ const checks: { readonly [Is in Kind["is"]]?: (one: Case<Is>) => Fault | undefin
   text: (one) => {
     const { kind, value, path } = one;
     const name = value as string;
-    if (name.trim() === "" && kind.words !== undefined) return wrong(one, code(one.example));
+    if (name.trim() === "" && kind.words !== undefined) return wrong(one, exampleIn(one, one.names));
     return kind.names && strangerFault(one, kind.names, [name], path, false);
   },
   choice: (one) => {
@@ -167,16 +195,10 @@ const checks: { readonly [Is in Kind["is"]]?: (one: Case<Is>) => Fault | undefin
   named: (one) => {
     const { kind, value, path, names } = one;
     const given = Object.entries(value as object).filter(([, own]) => own !== undefined);
+    const keys = given.map(([name]) => name);
     return (
-      first(given, ([name, own]) => faultOf(kind.of, own, [...path, name], names)) ??
-      (kind.names &&
-        strangerFault(
-          one,
-          kind.names,
-          given.map(([name]) => name),
-          path,
-          true,
-        ))
+      (kind.names && strangerFault(one, kind.names, keys, path, true)) ??
+      first(given, ([name, own]) => faultOf(kind.of, own, [...path, name], names))
     );
   },
   shape: ({ kind, value, path, names }) => shapeFault(kind, value as object, path, names),

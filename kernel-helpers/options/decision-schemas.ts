@@ -63,7 +63,7 @@ const shared: Schema<Shared> = {
 const sizes = [steppedPeriods, projectedPaths];
 
 const vary = required(
-  nameOf("varied", "payment"),
+  nameOf("varied", "r"),
   'What is varied: a parameter, a first value such as "N[0]", or an input, whose usual level is set',
 );
 
@@ -87,7 +87,7 @@ const solveForSchema: FunctionSchema = {
   name: "solveFor",
   takes: [ruleOrFit],
   options: { fields: solveOptions },
-  example: 'solveFor(fit, { vary: "payment", until: { time: "owed", fallsTo: 0, is: 24 }, periods: 36 })',
+  example: 'solveFor(fit, { vary: "r", until: { time: "N", risesTo: 90, is: 24 }, periods: 36 })',
   sizes,
 };
 
@@ -104,7 +104,7 @@ const optimizeSchema: FunctionSchema = {
   name: "optimize",
   takes: [ruleOrFit],
   options: { fields: optimizeOptions, oneOf: [["maximize", "minimize"]] },
-  example: 'optimize(fit, { vary: "h", range: [0, 1], maximize: { total: "catch" }, periods: 20 })',
+  example: 'optimize(fit, { vary: "r", range: [0.1, 1], maximize: { total: "N" }, periods: 20 })',
   sizes,
 };
 
@@ -147,7 +147,7 @@ const tradeoffOptions: Schema<TradeoffOptions> = {
     "Values to look at: a list, or two ends with how many",
   ),
   answers: required(
-    named(measure, '{ clear: { time: "owed", fallsTo: 0 } }'),
+    named(measure, '{ low: { lowest: "N" } }'),
     "What each value brings: measures by the name they are shown under",
   ),
 };
@@ -156,7 +156,7 @@ const tradeoffSchema: FunctionSchema = {
   name: "tradeoff",
   takes: [ruleOrFit],
   options: { fields: tradeoffOptions },
-  example: 'tradeoff(fit, { vary: "h", values: [0.1, 0.2], answers: { low: { lowest: "B" } }, periods: 20 })',
+  example: 'tradeoff(fit, { vary: "r", values: [0.1, 0.2], answers: { low: { lowest: "N" } }, periods: 20 })',
   sizes,
 };
 
@@ -176,7 +176,7 @@ const timeToReachSchema: FunctionSchema = {
   name: "timeToReach",
   takes: [{ name: "ahead", takes: ["forecast", "simulation"] }],
   options: { fields: timeToReachOptions, oneOf: [["risesTo", "fallsTo"]] },
-  example: 'timeToReach(forecast(fit, { periods: 24 }), { state: "owed", fallsTo: 0 })',
+  example: "timeToReach(forecast(fit, { periods: 24 }), { risesTo: 120 })",
 };
 
 const nextReadingOptions: Schema<NextReadingOptions> = {

@@ -81,7 +81,7 @@ const trajectorySchema: FunctionSchema = {
   name: "trajectory",
   takes,
   options: { fields: trajectoryOptions },
-  example: "trajectory(rule, { parameters: { R: 1.1 }, initial: { N: 100 }, periods: 12 })",
+  example: "trajectory(rule, { parameters: { r: 0.5, K: 100 }, initial: { N: 10 }, periods: 12 })",
   sizes: [steppedPeriods],
 };
 
@@ -111,7 +111,7 @@ const exactTrajectorySchema: FunctionSchema = {
   name: "exactTrajectory",
   takes,
   options: { fields: exactTrajectoryOptions },
-  example: 'exactTrajectory(rule, { parameters: { R: "11/10" }, initial: { N: 100 }, periods: 12 })',
+  example: 'exactTrajectory(rule, { parameters: { r: "1/2", K: 100 }, initial: { N: 10 }, periods: 6 })',
   sizes: [steppedPeriods],
 };
 
@@ -125,7 +125,7 @@ const closedFormSchema: FunctionSchema = {
   name: "closedForm",
   takes,
   options: { fields: closedFormOptions },
-  example: "closedForm(rule, { parameters: { a: 0.5, b: 1 }, initial: { x: 0 } })",
+  example: "closedForm(rule, { parameters: { r: 0.5, K: 100 }, initial: { N: 10 } })",
 };
 
 const searchRange: Value<SearchRange> = either(pair, named(pair, "{ N: [0, 100] }", "state"));
@@ -146,7 +146,7 @@ const equilibriaSchema: FunctionSchema = {
   name: "equilibria",
   takes,
   options: { fields: equilibriaOptions },
-  example: "equilibria(rule, { parameters: { r: 0.5, K: 1000 } })",
+  example: "equilibria(rule, { parameters: { r: 0.5, K: 100 } })",
 };
 
 const cyclesOptions: Schema<CyclesOptions & OfFit> = {
@@ -159,7 +159,7 @@ const cyclesSchema: FunctionSchema = {
   name: "cycles",
   takes,
   options: { fields: cyclesOptions },
-  example: "cycles(rule, { period: 2, parameters: { r: 3.2 } })",
+  example: "cycles(rule, { period: 2, parameters: { r: 2.2, K: 100 } })",
 };
 
 const vary = required(nameOf("parameter", "r"), "Parameter that is varied");
@@ -179,7 +179,7 @@ const bifurcationsSchema: FunctionSchema = {
   name: "bifurcations",
   takes,
   options: { fields: bifurcationsOptions },
-  example: 'bifurcations(rule, { vary: "r", range: [2.8, 3.3], initial: 0.3 })',
+  example: 'bifurcations(rule, { vary: "r", range: [1.8, 2.5], initial: 50 })',
 };
 
 const longest = 1e9;
@@ -198,7 +198,7 @@ const lyapunovExponentSchema: FunctionSchema = {
   name: "lyapunovExponent",
   takes,
   options: { fields: lyapunovExponentOptions },
-  example: "lyapunovExponent(rule, { parameters: { r: 3.9 }, initial: { x: 0.3 } })",
+  example: "lyapunovExponent(rule, { parameters: { r: 2.7, K: 100 }, initial: { N: 10 } })",
 };
 
 const predictionHorizonOptions: Schema<PredictionHorizonOptions & OfFit> = {
@@ -211,7 +211,7 @@ const predictionHorizonSchema: FunctionSchema = {
   name: "predictionHorizon",
   takes,
   options: { fields: predictionHorizonOptions },
-  example: "predictionHorizon(rule, { error: 0.001, tolerance: 0.1, initial: { x: 0.3 } })",
+  example: "predictionHorizon(rule, { error: 0.1, tolerance: 10, initial: { N: 10 } })",
 };
 
 type Ends = Exclude<AttractorOptions["values"], readonly number[]>;
@@ -266,7 +266,7 @@ const attractorSchema: FunctionSchema = {
   name: "attractor",
   takes,
   options: { fields: attractorOptions },
-  example: 'attractor(rule, { vary: "r", values: { from: 2.5, to: 4 }, initial: 0.3 })',
+  example: 'attractor(rule, { vary: "r", values: { from: 1.5, to: 3 }, initial: 50 })',
   sizes: attractorSize,
 };
 
@@ -280,7 +280,7 @@ const cobwebSchema: FunctionSchema = {
   name: "cobweb",
   takes,
   options: { fields: cobwebOptions },
-  example: "cobweb(rule, { initial: { x: 0.3 }, parameters: { r: 3.2 } })",
+  example: "cobweb(rule, { initial: { N: 10 }, parameters: { r: 2.2, K: 100 } })",
 };
 
 const known: Schema<NonNullable<BasinsOptions["known"]>> = {
@@ -305,14 +305,14 @@ const basinsSchema: FunctionSchema = {
   name: "basins",
   takes,
   options: { fields: basinsOptions },
-  example: "basins(rule, { range: [0, 110], parameters: { r: 0.2, K: 100, A: 20 } })",
+  example: "basins(rule, { range: [0, 110], parameters: { r: 2.2, K: 100 } })",
 };
 
 const matrixGrowthSchema: FunctionSchema = {
   name: "matrixGrowth",
   takes,
   options: { fields: held },
-  example: "matrixGrowth(rule, { parameters: { f1: 0, f2: 4, f3: 3, s1: 0.5, s2: 0.25 } })",
+  example: "matrixGrowth(rules.ages({ ages: 2 }), { parameters: { f1: 0, f2: 4, s1: 0.5 } })",
 };
 
 export const dynamicsSchemas: readonly FunctionSchema[] = [

@@ -62,7 +62,7 @@ function unknownError(
 }
 
 function missingError(
-  { path, fields }: Extract<Fault, { kind: "missing" }>,
+  { path, fields, instead }: Extract<Fault, { kind: "missing" }>,
   called: string,
   options: Given,
 ): ModelError {
@@ -76,11 +76,9 @@ function missingError(
       ? `${inCode(called)} needs ${which}`
       : `Option ${inCode(placeOf(path))} lacks ${list(names.map(inCode), "or")}`;
   const must = names.length === 1 ? `, ${mustBe(field.kind)}` : "";
-  return new ModelError(
-    "option-missing",
-    `${needs}${must}.${write(options, [...path, name], code(field.example))}`,
-    { options: names },
-  );
+  return new ModelError("option-missing", `${needs}${must}.${write(options, [...path, name], instead)}`, {
+    options: names,
+  });
 }
 
 function strangerError(
@@ -89,7 +87,8 @@ function strangerError(
 ): ModelError {
   const near = nearestNames(name, known);
   const right = near[0] ?? (known.length === 1 ? known[0] : undefined);
-  const has = known.length === 0 ? `It has no ${roleWords[role]} at all` : `It has ${list(known)}`;
+  const none = `It has no ${roleWords[role]} at all; leave ${inCode(String(path[0]))} out`;
+  const has = known.length === 0 ? none : `It has ${list(known)}`;
   const hint =
     near.length === 0
       ? ""

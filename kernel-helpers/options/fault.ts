@@ -28,6 +28,8 @@ export type Fault =
       readonly path: Path;
       /** One of these. */
       readonly fields: Readonly<Record<string, Field>>;
+      /** A value of the first of them. */
+      readonly instead: unknown;
     }
   | {
       readonly kind: "stranger";

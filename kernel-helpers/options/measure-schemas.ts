@@ -48,7 +48,7 @@ const kinds: Readonly<Record<Exclude<MeasureKind, "at" | "from" | "to" | "risesT
 
 export const measure: Value<Measure> = {
   kind: { is: "measures", of: kinds },
-  example: '{ time: "owed", fallsTo: 0 }',
+  example: '{ time: "N", risesTo: 90 }',
 };
 
 const aim = either(anyNumber, text("2027-12", "the label of a period"));
@@ -66,5 +66,5 @@ export const target: Value<SolveOptions["until"]> = {
       oneOf: [["is", "atMost", "atLeast"]],
     },
   },
-  example: '{ time: "owed", fallsTo: 0, is: 24 }',
+  example: '{ time: "N", risesTo: 90, is: 24 }',
 };

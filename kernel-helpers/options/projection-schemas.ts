@@ -176,7 +176,7 @@ const simulateSchema: FunctionSchema = {
   name: "simulate",
   takes: [rule],
   options: { fields: simulateOptions },
-  example: "simulate(rule, { parameters: { R: 1.1 }, initial: { N: 100 }, periods: 12 })",
+  example: "simulate(rule, { parameters: { r: 0.5, K: 100 }, initial: { N: 10 }, periods: 12 })",
   sizes: [projectedPeriods, projectedPaths],
 };
 

@@ -190,7 +190,7 @@ const differencesSchema: FunctionSchema = {
 const format = optional(
   oneOf<Format>("csv", "tsv", "json", "parquet", "excel", "duckdb"),
   "What the file holds",
-  "what the ending of its name says",
+  "what its extension says",
 );
 
 const readOptions: Schema<ReadOptions> = {
@@ -209,7 +209,7 @@ const readOptions: Schema<ReadOptions> = {
   ),
   missing: optional(
     listOf(text("n.d."), '["n.d."]', 0),
-    'Texts that mark a missing value: `["n.d.", "NA"]`; an empty cell always does',
+    'Texts that mean a missing value, such as `["n.d.", "NA"]`; an empty cell always does',
   ),
   encoding: optional(
     text("windows-1252"),

@@ -36,12 +36,12 @@ const names = listOf(text("C"), '["C"]', 0);
 const namedRuleOptions: Schema<NamedRuleOptions> = {
   name: optional(
     text("crowding"),
-    "What the rule is called in titles, tables and sentences",
+    "Name of the rule in titles, tables and sentences",
     "its text, or its name in the catalogue",
   ),
   inputs: optional(
     names,
-    "Names that are recorded by period, columns of the record; only they may be read at [t+1]",
+    "Names that are recorded by period, as columns of the record; only inputs can be read at [t+1]",
   ),
   units: optional(named(text("EUR"), '{ owed: "EUR" }'), "Unit by name"),
   bounds: optional(
@@ -49,7 +49,7 @@ const namedRuleOptions: Schema<NamedRuleOptions> = {
     "Lowest and highest admitted value by state or parameter; infinite where open",
   ),
   start: optional(valuesByName(), "Where a fit starts, by parameter"),
-  fixed: optional(valuesByName(), "Parameters that no fit changes, by name"),
+  fixed: optional(valuesByName(), "Parameters held at a value in every fit, by name"),
   initial: optional(
     named(either(firstValue, oneOf("estimated")), "{ N: 10 }"),
     'By state: its first value, its first values oldest first where the rule reads past ones, or "estimated"',
@@ -59,11 +59,7 @@ const namedRuleOptions: Schema<NamedRuleOptions> = {
 
 const recurrenceOptions: Schema<RecurrenceOptions> = {
   ...namedRuleOptions,
-  parameters: optional(
-    names,
-    "The only names that are parameters; any other free name is then refused",
-    "every free name",
-  ),
+  parameters: optional(names, "All parameters; any other free name is then an error", "every free name"),
 };
 
 const recurrenceSchema: FunctionSchema = {

@@ -8,8 +8,17 @@ export interface ForecastOptions extends RunHooks {
   /** Whole periods beyond the last recorded one. */
   readonly periods: number;
   /** The recorded period to start after, by its label or number, or one a group; default the last one. */
-  readonly from?: string | number | { readonly byGroup: Readonly<Record<string, string | number>> };
-  /** By input, the first period ahead first; needed for every input that the record does not hold so far ahead. */
+  readonly from?:
+    | string
+    | number
+    | {
+        /** One a group. */
+        readonly byGroup: Readonly<Record<string, string | number>>;
+      };
+  /**
+   * By input: what it will be, the first period ahead first; needed for every input that the record does not
+   * hold so far ahead.
+   */
   readonly inputs?: InputPlans;
   /** Several plans of inputs side by side, by the name of the scenario, run with the same random numbers. */
   readonly scenarios?: Scenarios;

@@ -29,13 +29,17 @@ function typesOf(kind: Kind): readonly string[] {
       return kind.of.flatMap((each) => typesOf(each.kind));
     // Whatever names there are is a matter of the rule; values under them are tried apart.
     case "named":
-      return kind.of.kind.is === "anything" ? ["object"] : [];
+      return ["object"];
     case "list":
       return kind.of.kind.is === "anything" ? ["list"] : [];
     default:
       return [];
   }
 }
+
+/** A name that the rule of the examples has. */
+const nameIn = ({ names = "state" }: { readonly names?: string }): string =>
+  ["parameter", "free", "varied"].includes(names) ? "r" : "N";
 
 /** Values of the wrong type for a kind, those inside lists and records as well. */
 export function wrongTypes(kind: Kind): readonly unknown[] {
@@ -44,7 +48,7 @@ export function wrongTypes(kind: Kind): readonly unknown[] {
   const values = own.map((type) => ofEveryType[type]);
   if (kind.is === "list") return [...values, ...wrongTypes(kind.of.kind).map((value) => listOf(kind, value))];
   return kind.is === "named"
-    ? [...values, ...wrongTypes(kind.of.kind).map((value) => ({ name: value }))]
+    ? [...values, ...wrongTypes(kind.of.kind).map((value) => ({ [nameIn(kind)]: value }))]
     : values;
 }
 
@@ -59,7 +63,7 @@ export function outOfRange(kind: Kind): readonly unknown[] {
     case "list":
       return outOfRange(kind.of.kind).map((value) => listOf(kind, value));
     case "named":
-      return outOfRange(kind.of.kind).map((value) => ({ name: value }));
+      return outOfRange(kind.of.kind).map((value) => ({ [nameIn(kind)]: value }));
     case "number": {
       const { from, above, to, below, whole, open, gaps } = kind;
       const ends = [from !== undefined && from - 1, above, to !== undefined && to + 1, below];

@@ -29,6 +29,7 @@ export type DatedTarget = Extract<Measure, { readonly time: string }> &
 export interface SolveOptions extends StandingOptions {
   /** What is varied: a parameter, a first value such as "N[0]", or an input, whose usual level is set. */
   readonly vary: string;
+  /** What is to be met: a measure that `is` a value, is `atMost` it or `atLeast` it. */
   readonly until: Target | DatedTarget;
   /** Lowest and highest value looked at; default a hundredth to a hundred times the present one, within its bounds. */
   readonly range?: readonly [number, number];

@@ -18,14 +18,19 @@ import { separationAt } from "./separation.js";
 export interface NextReadingOptions extends RunHooks {
   /** Periods beyond the record up to which a reading could be taken, and up to which the answer looks. */
   readonly periods: number;
-  /** x */
+  /**
+   * Periods at which it could be taken, by number or label: a list, or two ends; default every period from
+   * the first on.
+   */
   readonly values?:
     | readonly (number | string)[]
     | {
+        /** First period, by number or label. */
         readonly from: number | string;
+        /** Last period, by number or label. */
         readonly to: number | string;
       };
-  /** x */
+  /** Measure whose margin is to be narrowed; needed for a single fit. */
   readonly answer?: Measure;
   /** What is read; default the first state. */
   readonly state?: string;

@@ -10,9 +10,11 @@ import { type GroupChangePoint, groupChangePoint } from "./group-change-point.js
 export interface ChangePointOptions
   extends Omit<FitOptions, "errors" | "intervals" | "distribution">,
     RunHooks {
-  /** x */
+  /**
+   * Normal errors on the natural or on the log scale; counts are not searched for a break; default "normal".
+   */
   readonly distribution?: "normal" | "lognormal";
-  /** x */
+  /** Least share of the record on either side of a break, between 0 and 0.5; default 0.15. */
   readonly leastShare?: number;
   /**
    * Records without a break that the largest F is held against; with 399 a test at 5% is exact; default 399.

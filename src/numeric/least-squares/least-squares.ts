@@ -13,9 +13,9 @@ export interface LeastSquaresProblem {
   readonly jacobian?: (parameters: Float64Array) => ArrayLike<number>;
   /** Values of the parameters where the search begins. */
   readonly start: ArrayLike<number>;
-  /** Lowest and highest admitted values; open when absent. A parameter with equal bounds is held there. */
+  /** Lowest admitted values; a parameter with equal limits is held there; default no limit. */
   readonly lower?: ArrayLike<number>;
-  /** Highest admitted values; default no limit. */
+  /** Highest admitted values; a parameter with equal limits is held there; default no limit. */
   readonly upper?: ArrayLike<number>;
   /** Typical size of each parameter, for difference steps about 0; default its own value. */
   readonly scale?: ArrayLike<number>;
