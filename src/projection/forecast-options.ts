@@ -8,7 +8,10 @@ export interface ForecastOptions {
   readonly periods: number;
   /** The recorded period to start after, by its label or number, or one a group; default the last one. */
   readonly from?: string | number | { readonly byGroup: Readonly<Record<string, string | number>> };
-  /** By input, the first period ahead first; needed for every input that the record does not hold so far ahead. */
+  /**
+   * By input: what it will be, by the record's periods; one a group where groups differ. Needed for every input that the
+   * record does not hold so far ahead.
+   */
   readonly inputs?: InputPlans;
   /** Several plans of inputs side by side, run with the same random numbers. */
   readonly scenarios?: Scenarios;

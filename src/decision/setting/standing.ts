@@ -21,7 +21,7 @@ import { plain } from "../words/amount.js";
 export interface StandingOptions extends StartOptions {
   /** Whole periods ahead. */
   readonly periods: number;
-  /** By input: its plan. For a fit the first period ahead comes first, for a rule period 0. */
+  /** By input: what it will be, by the periods of the record or of the run. */
   readonly inputs?: InputPlans;
   /** Of a fit or a record with several groups: which one. */
   readonly group?: string;
