@@ -171,10 +171,18 @@ export function noPurposeError(): ModelError {
   );
 }
 
-export function noCandidateError(from: number, to: number): ModelError {
+export function noCandidateError(from: string, to: string): ModelError {
   return new ModelError(
     "no-candidate",
     `No reading can be taken at the times asked for; the rules know times from ${from} to ${to}, and with errors in the process only those after the record.`,
     { from, to },
+  );
+}
+
+export function periodError(period: string, first: string, second: string): ModelError {
+  return new ModelError(
+    "unknown-period",
+    `"${period}" names no single period of the projection; its periods are ${first}, ${second} and so on.`,
+    { period },
   );
 }

@@ -1,6 +1,7 @@
 import type { Warning } from "../numeric/index.js";
 import type { Observations } from "../record/index.js";
 import type { Rule } from "../rule/index.js";
+import { type CommonParameters, commonParametersWarnings } from "./fits/common-parameters.js";
 import { fitGroups } from "./fits/fit-group.js";
 import { checkOptions } from "./options/check-options.js";
 import { conventionsOf } from "./options/conventions.js";
@@ -8,6 +9,7 @@ import type { FitOptions } from "./options/fit-options.js";
 import { inputWarnings } from "./options/input-warnings.js";
 import { matchStates } from "./options/match-states.js";
 import { matchNotes, unitWarnings } from "./options/record-against-rule.js";
+import { recordWarnings } from "./options/record-warnings.js";
 import { type FitProblem, fitProblem } from "./problem/fit-problem.js";
 import { refuseMissingArgument } from "./refusals.js";
 import type { Criteria } from "./result/criteria.js";
@@ -26,6 +28,8 @@ export interface Fit {
   readonly criteria: Criteria;
   /** Of groups fitted together: the parameters that hold for all, or their means and spreads among the groups. */
   readonly population?: readonly Estimate[];
+  /** Of a combined fit: whether the groups have their parameters in common. */
+  readonly commonParameters?: CommonParameters;
   readonly warnings: readonly Warning[];
   /** The conventions behind the numbers, as printed with every table of the fit. */
   readonly conventions: readonly string[];
@@ -58,7 +62,7 @@ export function fit(rule: Rule, observations: Observations, options: FitOptions)
   checkOptions(rule, options);
   const matched = matchStates(rule, observations);
   const unitsDisagree = unitWarnings(rule, matched, options);
-  const { groups, criteria, population } = fitGroups(rule, matched.groups, options);
+  const { groups, criteria, population, commonParameters } = fitGroups(rule, matched.groups, options);
   const fitted: Fit = {
     kind: "fit",
     rule,
@@ -67,7 +71,14 @@ export function fit(rule: Rule, observations: Observations, options: FitOptions)
     groups,
     criteria,
     ...(population && { population }),
-    warnings: [...rule.findings, ...unitsDisagree, ...inputWarnings(rule, matched, options)],
+    ...(commonParameters && { commonParameters }),
+    warnings: [
+      ...rule.findings,
+      ...unitsDisagree,
+      ...recordWarnings(matched),
+      ...inputWarnings(rule, matched, options),
+      ...commonParametersWarnings(commonParameters),
+    ],
     conventions: [...conventionsOf(options, groups), ...matchNotes(rule, observations)],
   };
   problems.set(fitted, fitProblem(fitted, fit));

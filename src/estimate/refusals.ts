@@ -28,6 +28,16 @@ export function refuseUnknownName(name: string, known: readonly string[], role: 
   );
 }
 
+/** @param name - undefined where one of several was to be named. */
+export function groupError(name: string | undefined, groups: readonly string[]): ModelError {
+  const names = groups.map((group) => `"${group}"`).join(", ");
+  const has =
+    groups.length === 1 && groups[0] === "" ? "a single group without a name: leave `group` out" : names;
+  const said =
+    name === undefined ? "name one of the groups of the fit with it" : `the fit has no group "${name}"`;
+  return new ModelError("which-group", `Option \`group\`: ${said}. It has ${has}.`, { group: name, groups });
+}
+
 export function refuseStartOutsideBounds(
   name: string,
   value: number,
@@ -111,6 +121,15 @@ export function refuseNoStart(group: ObservedGroup, ruleText: string): ModelErro
     `No parameters were found at which "${ruleText}" stays finite over the record${named(group)}. Give ` +
       "{ start: { ... } } near plausible values, or { bounds: { ... } } that keep the rule in its range.",
     { group: group.name, rule: ruleText },
+  );
+}
+
+export function refuseStepsFromZero(group: ObservedGroup, row: number, ruleText: string): ModelError {
+  return new ModelError(
+    "step-from-zero",
+    `Row ${row}${named(group)} is a count of 0 and the next one is not: with \`errors: "process"\` every step starts from the ` +
+      `recorded count, and "${ruleText}" stays at 0. Write \`errors: "observation"\`, which fits the whole trajectory.`,
+    { group: group.name, row, rule: ruleText },
   );
 }
 

@@ -31,6 +31,8 @@ export {
   studentCdf,
   studentQuantile,
 } from "./probability/test-distributions.js";
+export { seededWords } from "./probability/xoshiro.js";
+export { type RunHooks, reporter, type Tick, ticker } from "./run-hooks.js";
 export { findRoot, type RootOptions } from "./search/find-root.js";
 export { type LowestValue, minimise } from "./search/minimise.js";
 export { secondDerivatives } from "./search/second-derivatives.js";

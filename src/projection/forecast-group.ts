@@ -1,5 +1,5 @@
 import { type Fit, type GroupFit, problemOf } from "../estimate/index.js";
-import type { RandomStream } from "../numeric/index.js";
+import { type RandomStream, reporter } from "../numeric/index.js";
 import { indexOf, labelAt, labelsAt, periodWords } from "../record/index.js";
 import { dependsOnPeriod, type StateBound } from "../rule/index.js";
 import { type CentralPath, centralPath } from "./central-path.js";
@@ -38,7 +38,8 @@ export function forecastGroup(
 }
 
 /** The index of the period to start after; undefined for the last recorded one. */
-function startsAfter(fit: Fit, { group }: GroupFit, from: ForecastOptions["from"]): number | undefined {
+function startsAfter(fit: Fit, { group }: GroupFit, asked: ForecastOptions["from"]): number | undefined {
+  const from = typeof asked === "object" ? asked.byGroup[group] : asked;
   if (from === undefined) return undefined;
   const { axis, index } = fit.observations.groups.find(({ name }) => name === group)!;
   const last = index[index.length - 1]!;
@@ -194,7 +195,8 @@ function runBoth(
   const future = gatherer({ ...shared, kind: "future observation", keepProcess: keep && !alike });
   const draws = change.map((noise) => noise && noiseDraw(noise));
   const bounds = runBounds(rule, draws);
-  const half = (part: number) => (done: number, of: number) => options.onProgress?.(part * of + done, 2 * of);
+  const report = reporter(options);
+  const half = (part: number) => (done: number, of: number) => report(part * of + done, 2 * of);
   const none = rule.states.map(() => undefined);
   const run: Omit<EnsembleRun, "change" | "reading" | "onRow"> = {
     compiled: ground.compiled,

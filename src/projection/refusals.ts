@@ -37,13 +37,13 @@ export function refuseSharedPlan(input: string, last: ReadonlyMap<string, number
   );
 }
 
-export function refuseStrangeGroup(input: string, group: string, groups: readonly string[]): ModelError {
+export function refuseStrangeGroup(where: string, group: string, groups: readonly string[]): ModelError {
   const [near] = nearestNames(group, groups);
   const hint = near === undefined ? "" : ` Did you mean "${near}"?`;
   return new ModelError(
     "plan-not-readable",
-    `Invalid plan for \`${input}\`: the fit has no group "${group}". It has: ${groups.map((name) => name || "a single group without a name").join(", ")}.${hint}`,
-    { input, group, groups },
+    `${where}: the fit has no group "${group}". It has: ${groups.map((name) => name || "a single group without a name").join(", ")}.${hint}`,
+    { group, groups },
   );
 }
 

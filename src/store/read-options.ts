@@ -1,9 +1,9 @@
-/** What a file may hold. */
+/** File formats. */
 export type Format = "csv" | "tsv" | "json" | "parquet" | "excel" | "duckdb";
 
-/** How to read a file where it cannot say so itself. */
+/** How to read a file where its contents leave it open. */
 export interface ReadOptions {
-  /** Default: by the ending of the file's name. */
+  /** What the file holds; default what its extension says. */
   readonly format?: Format;
   /** What separates the cells of a text file: ",", ";", a tab or "|"; found where the file shows it. */
   readonly delimiter?: string;
@@ -11,7 +11,7 @@ export interface ReadOptions {
   readonly decimal?: "." | ",";
   /** Order of dates written with numbers, or "text" to leave them as they are. */
   readonly dates?: "day-month-year" | "month-day-year" | "text";
-  /** Texts that mark a missing value: `["n.d.", "NA"]`. An empty cell always does. */
+  /** Texts that mean a missing value, such as `["n.d.", "NA"]`; an empty cell always does. */
   readonly missing?: readonly string[];
   /** Encoding of a text file, such as "windows-1252"; default UTF-8, or what its byte-order mark says. */
   readonly encoding?: string;

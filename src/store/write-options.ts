@@ -3,7 +3,7 @@ import type { Format } from "./read-options.js";
 
 /** How to write a file. */
 export interface WriteOptions {
-  /** Default: by the ending of the file's name. */
+  /** What the file holds; default what its extension says. */
   readonly format?: Format;
   /** What separates the cells of a text file; default "," (a tab for .tsv). */
   readonly delimiter?: string;
@@ -11,13 +11,13 @@ export interface WriteOptions {
   readonly table?: string;
 }
 
-/** A table with the name of its sheet or of its place in a database file. */
+/** A table with the name of its sheet or database table. */
 export interface NamedTable {
   readonly name: string;
   readonly table: ColumnTable;
 }
 
-/** Writes to `path`, which nobody else reads yet; messages name the file as the analyst wrote it. */
+/** Writes to `path`, a temporary file; messages name the file by `shownPath`. */
 export type Writer = (
   tables: readonly NamedTable[],
   path: string,

@@ -17,19 +17,28 @@ export type Target = Measure &
     | { readonly atLeast: number; readonly is?: never; readonly atMost?: never }
   );
 
+/** A time by which something is to happen, or before which it is not, as a label of the record's periods. */
+export type DatedTarget = Extract<Measure, { readonly time: string }> &
+  (
+    | { readonly is: string; readonly atMost?: never; readonly atLeast?: never }
+    | { readonly atMost: string; readonly is?: never; readonly atLeast?: never }
+    | { readonly atLeast: string; readonly is?: never; readonly atMost?: never }
+  );
+
 /** Options of `solveFor`. */
 export interface SolveOptions extends DecisionOptions {
-  /** A parameter, a first value such as "N[0]", or an input whose usual level is sought. */
+  /** What is varied: a parameter, a first value such as "N[0]", or an input, whose usual level is set. */
   readonly vary: string;
-  readonly until: Target;
+  /** What is to be met: a measure that `is` a value, is `atMost` it or `atLeast` it. */
+  readonly until: Target | DatedTarget;
   /** Lowest and highest value looked at; default a hundredth to a hundred times the present one, within its bounds. */
   readonly range?: readonly [number, number];
   /**
-   * The setting comes in multiples of this (0.01 for money, 1 for pieces). With `atMost` and `atLeast` only multiples
+   * The value comes in multiples of this (0.01 for money, 1 for pieces). With `atMost` and `atLeast` only multiples
    * are tried, and the first that meets the target is given; with `is` the nearest multiple.
    */
   readonly multiple?: number;
-  /** Level of the interval; default 0.95. */
+  /** Confidence level of the interval, between 0 and 1; default 0.95. */
   readonly level?: number;
 }
 

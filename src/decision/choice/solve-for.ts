@@ -15,7 +15,7 @@ import { type Setting, settingOf } from "../setting/set-value.js";
 import { settingMargin } from "../setting/setting-margin.js";
 import { checkedRange, withUnplanned } from "../setting/setting-range.js";
 import { opened } from "../words/amount.js";
-import type { Jump, Solution, Solved, SolveOptions, Target } from "./solution.js";
+import type { DatedTarget, Jump, Solution, Solved, SolveOptions, Target } from "./solution.js";
 import { pastAlready, signNotes } from "./solve-notes.js";
 import { solveSentence } from "./solve-sentence.js";
 import { type Crossing, onMultiple, type Roots, solveWithin } from "./solve-within.js";
@@ -43,10 +43,11 @@ const simulatedTolerance = 1e-5;
  * asked.solutions[0].value // 1000*0.01/(1 - 1.01**-12)
  */
 export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
-  const { vary, until, level = 0.95, multiple } = options;
-  const aim = aimOf(until);
+  const { vary, level = 0.95, multiple } = options;
   const given = checkedRange(subject, options);
   const context = decisionContext(subject, withUnplanned(subject, options, vary, given));
+  const until = numericTarget(options.until, context);
+  const aim = aimOf(until);
   const setting = settingOf(context, vary);
   const range = given ?? rangeOf(setting);
   const reader = measureReader(context, until);
@@ -87,6 +88,13 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
       .flatMap(({ value }) => signNotes(context, setting, value, until, search.read(value))),
   ].join(" ");
   return { kind: "solution", ...answer, sentence };
+}
+
+/** A target whose label of a period is replaced by the time that measures are in. */
+function numericTarget(target: Target | DatedTarget, { timeOf }: DecisionContext): Target {
+  const key = (["is", "atMost", "atLeast"] as const).find((each) => typeof target[each] === "string");
+  // Of the keys of a target only one is set.
+  return key === undefined ? (target as Target) : ({ ...target, [key]: timeOf(target[key]!) } as Target);
 }
 
 /** The value asked for; of a probability between 0 and 1. */

@@ -1,4 +1,5 @@
 import { type CrossedLevel, type Forecast, levelSide, type Simulation } from "../../projection/index.js";
+import { labelBetween } from "../../record/index.js";
 import { levelWords } from "../measure/measure-words.js";
 import { amount, opened, percent, percentWords, rounded, shareOfPaths } from "../words/amount.js";
 import { conditionWords, groupWords } from "../words/record-words.js";
@@ -177,12 +178,14 @@ function newUnit(
   const fit = fitOf(ahead);
   if (across === undefined || fit === undefined) return "";
   const [column = "unit"] = fit.observations.by ?? [];
-  const { time } = ahead.groups[0]!;
+  const { axis, index, time } = ahead.groups[0]!;
   const [begin, end] = [time[0]!, time[time.length - 1]!];
-  const spread = across.standardDeviation;
-  const lower = across.newLower < begin ? "the start" : `${periodUnit} ${rounded(across.newLower, spread)}`;
-  const upper =
-    across.newUpper > end ? "beyond the forecast" : `${periodUnit} ${rounded(across.newUpper, spread)}`;
+  const said = (at: number): string =>
+    axis.counts === "numbers"
+      ? `${periodUnit} ${rounded(at, across.standardDeviation)}`
+      : labelBetween(axis, index[0]!, (at - begin) / axis.step.every);
+  const lower = across.newLower < begin ? "the start" : said(across.newLower);
+  const upper = across.newUpper > end ? "beyond the forecast" : said(across.newUpper);
   return `; for a new ${column}, with the scatter between the ${across.count} added, the ${percentWords(level)} interval is ${lower} to ${upper}`;
 }
 

@@ -10,7 +10,7 @@ import {
   type StartOptions,
 } from "../../dynamics/index.js";
 import { type Fit, type GroupFit, problemOf } from "../../estimate/index.js";
-import { type RandomStream, randomStream } from "../../numeric/index.js";
+import { type RandomStream, type RunHooks, randomStream, type Tick, ticker } from "../../numeric/index.js";
 import {
   centralLevels,
   type FitGround,
@@ -21,28 +21,29 @@ import {
   ruleNoise,
   startNames,
 } from "../../projection/index.js";
-import { labelBetween, type PeriodAxis } from "../../record/index.js";
+import { indexOf, labelAt, labelBetween, type PeriodAxis } from "../../record/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../../rule/index.js";
-import { groupError } from "../errors.js";
+import { groupError, periodError } from "../errors.js";
 import type { MeasureUnits } from "../measure/measure-words.js";
 import { withinError } from "../words/amount.js";
 
 /** What a decision is worked out from, beside the rule or fit itself. */
-export interface DecisionOptions extends StartOptions {
+export interface DecisionOptions extends StartOptions, RunHooks {
   /** Whole periods ahead. */
   readonly periods: number;
-  /** By input: its plan. For a fit the first period ahead comes first, for a rule period 0. */
+  /** By input: its plan; for a fit the first period ahead comes first, for a rule period 0. */
   readonly inputs?: InputPlans;
   /** Of a fit or a record with several groups: which one. */
   readonly group?: string;
-  /** Of a rule: its parameters and first values. */
+  /** Of a rule: its parameters by name. */
   readonly parameters?: Readonly<Record<string, number>>;
+  /** Of a rule: its first values by state. */
   readonly initial?: InitialValues;
   /** Of a rule: random change by state; every measure is then one of the paths' distribution. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** Paths where chance has a part; default 4000. */
+  /** Random paths where chance has a part; default 4000. */
   readonly paths?: number;
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
 }
 
@@ -56,6 +57,8 @@ export interface DecisionContext extends MeasureUnits {
   readonly axis: PeriodAxis;
   /** Time of period 0 of the axis, in the period column's unit. */
   readonly zero: number;
+  /** The period column's value of a period that is named by its label, or given as such a value. */
+  readonly timeOf: (period: string | number) => number;
   /** The period column's value at a row. */
   readonly timeAt: (row: number) => number;
   /** By state: the random change at parameters of its own, because its size may be one of them. */
@@ -65,9 +68,15 @@ export interface DecisionContext extends MeasureUnits {
   readonly seed: number;
   /** Random numbers of the question, the same at every call: those of a forecast or simulation with this seed. */
   readonly stream: () => RandomStream;
+  /** Called before each run of the rule. */
+  readonly tick: Tick;
   /** The ground under other plans of inputs. */
   readonly planned: (plans: InputPlans) => Ground;
 }
+
+/** Runs that an answer takes, roughly: a place in the range each, and for a fit some at every draw of its parameters. */
+const runsOfRule = 100;
+const runsOfFit = 5000;
 
 /** Whether a subject is a fit. */
 export const isFit = (subject: Fit | Rule): subject is Fit => subject.kind === "fit";
@@ -109,6 +118,7 @@ function fitContext(fit: Fit, options: DecisionOptions): OwnContext {
     zero: first,
     timeAt: (row) => first + (ground.from + row) * axis.step.every,
     timeWords: timeWordsOf(axis, first),
+    timeOf: timeReader(axis, first),
     changeAt: () => problemOf(fit).group(group.group).noise.change,
     plans,
     stream: () =>
@@ -116,6 +126,7 @@ function fitContext(fit: Fit, options: DecisionOptions): OwnContext {
         (own) => own.jump(),
         randomStream(options.seed ?? 1),
       ),
+    tick: ticker(options, runsOfFit),
     planned,
     unitOf: (name) => {
       const state = stateOf(name);
@@ -157,9 +168,11 @@ function ruleContext(rule: Rule, options: DecisionOptions): OwnContext {
     zero: first,
     timeAt: (row) => first + (from + row) * axis.step.every,
     timeWords: timeWordsOf(axis, first),
+    timeOf: timeReader(axis, first),
     plans: options.inputs ?? {},
     changeAt: (at) => ruleNoise(rule, at, options.noise),
     stream: () => randomStream(options.seed ?? 1),
+    tick: ticker(options, runsOfRule),
     planned,
     unitOf: (name) => rule.units[stateOf(name)] ?? "",
     periodUnit: axis.unit,
@@ -170,4 +183,13 @@ function ruleContext(rule: Rule, options: DecisionOptions): OwnContext {
 function timeWordsOf(axis: PeriodAxis, zero: number): DecisionContext["timeWords"] {
   if (axis.counts === "numbers") return (time, error = 0) => `${axis.unit} ${withinError(time, error, 5)}`;
   return (time) => labelBetween(axis, 0, (time - zero) / axis.step.every);
+}
+
+function timeReader(axis: PeriodAxis, zero: number): DecisionContext["timeOf"] {
+  return (period) => {
+    if (typeof period === "number") return period;
+    const index = indexOf(axis, period);
+    if (index === undefined) throw periodError(period, labelAt(axis, 0), labelAt(axis, 1));
+    return zero + index * axis.step.every;
+  };
 }

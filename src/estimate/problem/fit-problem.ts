@@ -16,6 +16,8 @@ export interface RefitChanges {
   readonly observations?: Observations;
   /** Where the error lies instead. */
   readonly errors?: ErrorKind;
+  /** Whether groups have parameters of their own. */
+  readonly groups?: "separate" | "combined";
   /** Where the search begins; what is not named as before. */
   readonly start?: Readonly<Record<string, number>>;
   readonly intervals?: "profile" | "none";
@@ -81,8 +83,10 @@ export function fitProblem(
       made.set(name, problem);
       return problem;
     },
-    refit({ observations: other = observations, errors = options.errors, start, intervals }) {
-      const { groups, ...rest } = options;
+    refit(changes) {
+      const { observations: other = observations, errors = options.errors, start, intervals } = changes;
+      const { groups: before, ...rest } = options;
+      const groups = changes.groups ?? before;
       return fitAgain(rule, other, {
         ...rest,
         errors,

@@ -9,13 +9,15 @@ import { type ResidualSystem, residualSystem } from "./residual-system.js";
 export interface LeastSquaresProblem {
   /** Residuals [rows] at parameters [size]; NaN where the model is not defined. */
   readonly residuals: (parameters: Float64Array) => ArrayLike<number>;
-  /** Derivative of every residual by every parameter, row-major [rows, size]; by differences when absent. */
+  /** Derivative of every residual by every parameter, row-major [rows, size]; default central differences. */
   readonly jacobian?: (parameters: Float64Array) => ArrayLike<number>;
+  /** Values of the parameters where the search begins. */
   readonly start: ArrayLike<number>;
-  /** Lowest and highest admitted values; open when absent. */
+  /** Lowest admitted values; a parameter with equal limits is held there; default no limit. */
   readonly lower?: ArrayLike<number>;
+  /** Highest admitted values; a parameter with equal limits is held there; default no limit. */
   readonly upper?: ArrayLike<number>;
-  /** Typical size of each parameter, for difference steps about 0; by default its own value tells. */
+  /** Typical size of each parameter, for difference steps about 0; default its own value. */
   readonly scale?: ArrayLike<number>;
 }
 
@@ -29,7 +31,7 @@ export interface LeastSquaresSolution {
   readonly covariance: Float64Array;
   readonly residuals: Float64Array;
   readonly sumOfSquares: number;
-  /** sumOfSquares / (rows - size); undefined when no residual is left over. */
+  /** sumOfSquares / (rows - parameters not held); undefined when no residual is left over. */
   readonly variance: number | undefined;
   /** Number of parameters, or combinations of them, that the residuals determine at the solution. */
   readonly rank: number;
@@ -74,7 +76,8 @@ export function leastSquares(problem: LeastSquaresProblem): LeastSquaresSolution
   if (rows < size) throw tooFewResiduals(rows, size);
   const { residuals, jacobian } = problem;
   const system = residualSystem({ residuals, jacobian, rows, lower, upper, scale });
-  return solution(system, lowest(system, start, lower, upper));
+  const held = lower.filter((bound, j) => bound === upper[j]).length;
+  return solution(system, lowest(system, start, lower, upper), rows - size + held);
 }
 
 function optional(
@@ -102,10 +105,9 @@ function lowest(
   return minimiseSquares(system, best.estimates, { ...bounded, reach: 1 });
 }
 
-function solution(system: ResidualSystem, found: Minimum): LeastSquaresSolution {
+function solution(system: ResidualSystem, found: Minimum, left: number): LeastSquaresSolution {
   const { size, triangle } = system;
   system.evaluate(found.estimates);
-  const left = system.residuals.length - size;
   const variance = left > 0 ? found.sumOfSquares / left : undefined;
   const { covariance, determined, rank } = covarianceFromTriangle(triangle, size);
   for (let i = 0; i < covariance.length; i++) covariance[i] = covariance[i]! * (variance ?? Number.NaN);

@@ -10,6 +10,7 @@ export function numberAxis(origin: number, period: string | StepLength): PeriodA
   const step = typeof period === "string" ? { every: 1, of: period } : period;
   const { every, of } = step;
   return {
+    kind: "period-axis",
     column: of,
     unit: of,
     step,
