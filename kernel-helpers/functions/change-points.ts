@@ -14,6 +14,7 @@ import type { ChangePoint } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { acrossGroup, periodColumn } from "./across-periods.js";
 import { caseLog } from "./case-log.js";
+import { cautionsByGroup } from "./cautions-by-group.js";
 import { presentFitIn } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
 
@@ -78,6 +79,7 @@ function breaksTable(looked: EngineChangePoint): Table {
     ),
     notes: [
       looked.sentence,
+      ...cautionsByGroup([{ group: "", warnings: looked.fit.warnings }]),
       `Held against the largest F of ${looked.resamples} records drawn without a break; an F table would call a break far too often.`,
     ],
   });

@@ -33,14 +33,14 @@ export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum
 }
 
 /**
- * What an answer hangs on: its change for one standard error and for ten per cent of each parameter, in two charts,
+ * What an answer is sensitive to: its change for one standard error and for ten per cent of each parameter, in two charts,
  * and the elasticities.
  *
  * @example sensitivity(fitted, { periods: 12, answer: { time: "N", risesTo: 600 } }).rows.length // 3
  */
 export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): Sensitivity {
   const found = sensitivityOf(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
-  caseLog.noteStep(`asked what ${found.measure} hangs on`);
+  caseLog.noteStep(`asked how sensitive ${found.measure} is`);
   return showing(found, () => shownTogether(showSensitivity(found)));
 }
 

@@ -5,6 +5,7 @@ import {
 } from "../../src/evidence/index.js";
 import { frozenCopy } from "../../src/numeric/index.js";
 import type { Observations } from "../../src/record/index.js";
+import { type RuleCatalogue, shortNames } from "../../src/rule/index.js";
 import { type Figure, figure } from "../figures/index.js";
 import type { Proposal } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
@@ -38,7 +39,8 @@ function proposalTable(proposal: EngineProposal): Table {
   return table({
     title: "Rules of the catalogue tried on this record",
     columns: [
-      { key: "name", label: "Rule", kind: "text" },
+      { key: "rule", label: "Rule", kind: "text" },
+      { key: "call", label: "In the catalogue", kind: "text" },
       { key: "errors", label: "Error in the", kind: "text" },
       { key: "parameters", label: "Unknowns", kind: "integer" },
       { key: "difference", label: "AICc above the lowest", kind: "number", digits: 3 },
@@ -47,6 +49,7 @@ function proposalTable(proposal: EngineProposal): Table {
     ],
     rows: proposal.rows.map((row) => ({
       ...row,
+      call: `rules.${row.name}`,
       heldOut: row.heldOut ?? "not forecast",
       answer: row.supported ? supportedText(row.undetermined) : row.reason,
     })),
@@ -62,10 +65,15 @@ function leftOutTable(proposal: EngineProposal): Table {
   return table({
     title: "Rules that were not tried",
     columns: [
-      { key: "name", label: "Rule", kind: "text" },
+      { key: "rule", label: "Rule", kind: "text" },
+      { key: "call", label: "In the catalogue", kind: "text" },
       { key: "reason", label: "Because it", kind: "text" },
     ],
-    rows: proposal.notTried.map((row) => ({ ...row })),
+    rows: proposal.notTried.map(({ name, reason }) => ({
+      rule: shortNames[name as keyof RuleCatalogue],
+      call: `rules.${name}`,
+      reason,
+    })),
   });
 }
 
@@ -85,7 +93,7 @@ function supportedFigure(proposal: EngineProposal): Figure {
           const kind = proposal.errors === "undecided" ? `, error in the ${names[i]!.errors}` : "";
           return {
             mark: "line",
-            name: `${names[i]!.name}${kind}`,
+            name: `${names[i]!.rule}${kind}`,
             x: points.map((point) => point.time),
             y: points.map((point) => point.fitted),
           } as const;

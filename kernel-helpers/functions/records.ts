@@ -12,7 +12,7 @@ import {
   tableOfRows,
 } from "../../src/record/index.js";
 import {
-  holdsSeveral,
+  holdsSeveralTables,
   type NamedTable,
   type ReadOptions,
   type RecordSource,
@@ -93,7 +93,7 @@ function withDecisions(
 ): readonly NamedTable[] {
   const { decisions = [] } = record;
   const shown = { name: table ?? "record", table: shownTable(record) };
-  if (decisions.length === 0 || !holdsSeveral(path, format)) return [shown];
+  if (decisions.length === 0 || !holdsSeveralTables(path, format)) return [shown];
   const name = table === undefined ? "decisions" : `${table} decisions`;
   return [shown, { name, table: tableOfRows(decisionRows(decisions)) }];
 }

@@ -2,7 +2,7 @@ import type { Observations, ObservedGroup, ObservedState } from "../../src/recor
 import { type Figure, type FlaggedValue, recordFigure } from "../figures/index.js";
 import { type Observations as ShownObservations, withLast } from "../results/index.js";
 import { type Bundle, showing, type Table, table } from "../tables/index.js";
-import { acrossRecord } from "./across-periods.js";
+import { acrossRecord, periodCell, periodColumn } from "./across-periods.js";
 import { decisionsTable } from "./decisions-table.js";
 import { countsSentence, findingsList, periodSentence } from "./findings-list.js";
 import { shownTogether } from "./shown-together.js";
@@ -31,7 +31,8 @@ function seriesTable(observations: Observations): Table {
     columns: [
       ...(named ? [{ key: "name", label: "Series", kind: "text" as const }] : []),
       { key: "count", label: "Values", kind: "integer" },
-      { key: "last", label: "Last step", kind: "integer" },
+      periodColumn("from", "From", observations.axis),
+      periodColumn("to", "To", observations.axis),
       { key: "gaps", label: "Multi-step pairs", kind: "integer" },
       ...states.flatMap(({ state, i }) =>
         ["first", "least", "most", "final"].map((word) => ({
@@ -49,11 +50,12 @@ function seriesTable(observations: Observations): Table {
 }
 
 function seriesRow(group: ObservedGroup, states: readonly ObservedState[]): Record<string, unknown> {
-  const { index } = group;
+  const { axis, index, time } = group;
   const row: Record<string, unknown> = {
     name: group.name,
     count: index.length,
-    last: index[index.length - 1],
+    from: periodCell(axis, time[0]!, time[0]!),
+    to: periodCell(axis, time[0]!, time[time.length - 1]!),
     gaps: index.filter((at, i) => i > 0 && at - index[i - 1]! > 1).length,
   };
   states.forEach(({ name }, i) => {

@@ -11,13 +11,14 @@ const shows: unique symbol = Symbol.for("mime-bundle") as never;
  *
  * The result is not copied: what is kept beside an object (a rule's graph and code) is found again under the same one.
  *
- * @param result - a plain object of the package's own; one that shows itself already is returned as it is.
+ * @param result - a plain object; one that shows itself already, or that somebody froze before, is left as it is.
  * @param bundle - makes the representations when a front end asks, not before.
  * @returns the same object, frozen.
  * @example showing({ kind: "note", text: "two gaps" }, () => ({ "text/plain": "two gaps" }));
  */
 export function showing<T extends object>(result: T, bundle: () => Bundle | Promise<Bundle>): Readonly<T> {
-  if (!Object.hasOwn(result, shows)) Object.defineProperty(result, shows, { value: bundle });
+  if (!Object.hasOwn(result, shows) && Object.isExtensible(result))
+    Object.defineProperty(result, shows, { value: bundle });
   return freezeDeep(result);
 }
 

@@ -1,4 +1,5 @@
 export { type Fit, fit, problemOf } from "./fit.js";
+export { type CommonParameters, testWords } from "./fits/common-parameters.js";
 export { type GridIntervalOptions, gridInterval } from "./intervals/grid-interval.js";
 export type { Interval } from "./intervals/interval.js";
 export type { ErrorDistribution, ErrorKind, FitOptions } from "./options/fit-options.js";

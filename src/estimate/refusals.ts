@@ -49,6 +49,22 @@ export function refuseUnmatchedStates(states: readonly string[], recorded: reado
   );
 }
 
+export function unitScaleError(
+  state: string,
+  column: string,
+  recorded: string,
+  stated: string,
+  factor: number,
+): ModelError {
+  const times = Number((factor < 1 ? 1 / factor : factor).toPrecision(6));
+  return new ModelError(
+    "unit-scales-differ",
+    `The record gives "${column}" in ${recorded}, and the rule states ${stated} for ${state}: a factor of ${times} apart. ` +
+      `Write \`units: { ${state}: "${recorded}" }\` with the rule, or convert the column and state \`unit: "${stated}"\` in observations(...).`,
+    { state, column, recorded, stated, factor },
+  );
+}
+
 export function refuseMissingInput(input: string, group: ObservedGroup): ModelError {
   return new ModelError(
     "input-not-recorded",
@@ -95,6 +111,15 @@ export function refuseNoStart(group: ObservedGroup, ruleText: string): ModelErro
     `No parameters were found at which "${ruleText}" stays finite over the record${named(group)}. Give ` +
       "{ start: { ... } } near plausible values, or { bounds: { ... } } that keep the rule in its range.",
     { group: group.name, rule: ruleText },
+  );
+}
+
+export function refuseStepsFromZero(group: ObservedGroup, row: number, ruleText: string): ModelError {
+  return new ModelError(
+    "step-from-zero",
+    `Row ${row}${named(group)} is a count of 0 and the next one is not: with \`errors: "process"\` every step starts from the ` +
+      `recorded count, and "${ruleText}" stays at 0. Write \`errors: "observation"\`, which fits the whole trajectory.`,
+    { group: group.name, row, rule: ruleText },
   );
 }
 

@@ -52,6 +52,14 @@ export function refuseNoDates(group: string, count: number): ModelError {
   );
 }
 
+export function notSeveralGroups(count: number): ModelError {
+  return new ModelError(
+    "not-several-groups",
+    `Whether groups have the same parameters is asked of a fit with several groups, with \`groups: "separate"\` or "combined"; this one has ${count}${count > 1 ? ", mixed" : ""}. Name the column that tells them apart with \`by\` in observations(...).`,
+    { count },
+  );
+}
+
 /** Fits whose record is not searched for a break. */
 export function refuseUnsearched(
   what: "counts" | "censored" | "together",

@@ -3,7 +3,7 @@ import { randomStream } from "../numeric/index.js";
 import { checkRun } from "./check-run.js";
 import { forecastGroup } from "./forecast-group.js";
 import type { ForecastOptions, ForecastSettings } from "./forecast-options.js";
-import { checkPlansByGroup } from "./inputs/plans-by-group.js";
+import { checkPlansByGroup, checkStartsByGroup } from "./inputs/plans-by-group.js";
 import { scenariosOf } from "./inputs/scenarios.js";
 import type { GroupForecast } from "./projected-group.js";
 
@@ -39,6 +39,7 @@ export function forecast(fit: Fit, options: ForecastOptions): Forecast {
   const settings = { periods, levels, paths, seed };
   const scenarios = scenariosOf(options);
   for (const { plans } of scenarios) checkPlansByGroup(fit, plans);
+  checkStartsByGroup(fit, options.from);
   let stream = randomStream(seed);
   const groups = fit.groups.flatMap((group) => {
     const own = stream;

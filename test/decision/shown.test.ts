@@ -42,7 +42,7 @@ describe("what is shown of a decision has its numbers and its sentence", () => {
       risesTo: 120,
     });
     const text = await shown(found);
-    expect(text).toContain("When N reaches 120 ×10⁴ cells/mL by N[t+1] = R*N");
+    expect(text).toContain("When N reaches 120 ×10⁴ cells/mL by the rule N[t+1] = R*N");
     expect(text).toContain(found.sentence.slice(0, 60));
     expect(text).toMatch(/\bA\b[\s\S]*\bB\b/);
   });

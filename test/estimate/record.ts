@@ -59,5 +59,14 @@ function groupOf(
 /** Weeks by number, from a first one on. */
 export function numbered(origin: number): PeriodAxis {
   const step = { every: 1, of: "week" };
-  return { column: "t", unit: "week", step, form: "number", counts: "numbers", origin, stride: 1 };
+  return {
+    kind: "period-axis",
+    column: "t",
+    unit: "week",
+    step,
+    form: "number",
+    counts: "numbers",
+    origin,
+    stride: 1,
+  };
 }

@@ -152,6 +152,16 @@ describe("groups", () => {
     const { groups } = forecast(fitted, { periods: 3, from: "2025-06", inputs: { paid }, paths: 20 });
     expect(groups[0]!.labels).toEqual(["2025-06-30", "2025-07-31", "2025-08-31", "2025-09-30"]);
     expect(groups[0]!.states[0]!.central[0]).toBe(record.groups[0]!.values["owed"]![5]);
+    const each = forecast(fitted, {
+      periods: 3,
+      from: { byGroup: { A: "2025-06" } },
+      inputs: { paid },
+      paths: 20,
+    });
+    expect(each.groups.map(({ labels }) => labels![0])).toEqual(["2025-06-30", "2025-10-31"]);
+    expect(() => forecast(fitted, { periods: 3, from: { byGroup: { C: "2025-06" } } })).toThrow(
+      'Option `from`: the fit has no group "C".',
+    );
     expect(groups[0]!.warnings[0]!.message).toBe(
       "The forecast starts after 2025-06-30; its parameters were estimated from the whole record, later rows included.",
     );

@@ -14,6 +14,7 @@ import { normalEquations } from "../systems/normal-equations.js";
 import { prepared } from "../systems/prepared.js";
 import { sharedUnknowns } from "../unknowns/shared-unknowns.js";
 import { unknownsOf } from "../unknowns/unknowns.js";
+import { commonParameters } from "./common-parameters.js";
 import type { JointFit } from "./joint-fit.js";
 
 /**
@@ -40,9 +41,16 @@ export function combinedFit(rule: Rule, groups: readonly ObservedGroup[], option
   const level = options.level ?? 0.95;
   const left = rows.count - rows.size;
   const estimates = estimatesOf(rule, all, found, level, left);
+  const common = commonParameters(
+    own,
+    parts,
+    maps.map((map) => gather(found.at, map, new Float64Array(map.length))),
+    { sumOfSquares: found.value, free: rows.size, knownSd: options.sd !== undefined },
+  );
   const measures = { sigma: Math.sqrt(found.value / left), exact: true };
   return {
     criteria: criteria(found.value, rows, options),
+    ...(common && { commonParameters: common }),
     population: estimates.filter(({ role }) => role === "parameter"),
     groups: groups.map((group, g) => {
       const searched = { group, unknowns: own[g]!, rows: parts[g]!.rows };

@@ -4,7 +4,7 @@ import { checkGroup } from "../options/check-group.js";
 import type { FitOptions } from "../options/fit-options.js";
 import type { Search } from "../problem/search.js";
 import { kindOf, searchOf } from "../problem/search-of.js";
-import { refuseNoStart, refuseTogether } from "../refusals.js";
+import { refuseNoStart, refuseStepsFromZero, refuseTogether } from "../refusals.js";
 import { addedCriteria } from "../result/criteria.js";
 import { describeFit } from "../result/describe-fit.js";
 import type { GroupFit } from "../result/group-fit.js";
@@ -24,10 +24,18 @@ function fitGroup(rule: Rule, group: ObservedGroup, options: FitOptions): GroupF
 
 function solved(rule: Rule, search: Search, options: FitOptions): GroupFit {
   const starts = search.starts();
-  if (starts.length === 0) throw refuseNoStart(search.group, rule.text);
+  if (starts.length === 0) throw noStart(rule, search, options);
   const { objective, unknowns, cutAt } = search;
   const found = optimum(objective, unknowns, starts, cutAt, options.intervals !== "none");
   return describeFit(rule, search, options, found, search.measures(found.at, found.value));
+}
+
+/** Why no start was found: of counts most often a step from 0. */
+function noStart(rule: Rule, { group, family }: Search, options: FitOptions): Error {
+  const column = group.values[rule.states[0]!]!;
+  const from = column.findIndex((value, row) => value === 0 && column[row + 1]! > 0);
+  const stuck = family?.counts === true && options.errors === "process" && from >= 0;
+  return stuck ? refuseStepsFromZero(group, group.rows[from]!, rule.text) : refuseNoStart(group, rule.text);
 }
 
 /** Fits all groups of a record: each on its own, with the same parameters, or with parameters from a population. */

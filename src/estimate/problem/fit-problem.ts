@@ -16,6 +16,8 @@ export interface RefitChanges {
   readonly observations?: Observations;
   /** Where the error lies instead. */
   readonly errors?: ErrorKind;
+  /** Whether groups have parameters of their own. */
+  readonly groups?: "separate" | "combined";
   /** Where the search begins; what is not named as before. */
   readonly start?: Readonly<Record<string, number>>;
   readonly intervals?: "profile" | "none";
@@ -33,8 +35,8 @@ export interface FitProblem {
   readonly groups: "separate" | "combined" | "mixed";
   /** Of the intervals. */
   readonly level: number;
-  /** States that the record reads only up to an unknown factor. */
-  readonly readByFactor: readonly string[];
+  /** By state that the record reads only up to an unknown factor: the name of the factor. */
+  readonly factors: Readonly<Record<string, string>>;
   /** What the fit was made with, in words. */
   readonly aspects: FitAspects;
   /** Lowest and highest admitted value of a parameter or initial state. */
@@ -70,7 +72,7 @@ export function fitProblem(
     groups: together,
     level: options.level ?? 0.95,
     around: aroundOf(errorFamily(options), scaleOf(options)),
-    readByFactor: Object.keys(options.factor ?? {}),
+    factors: options.factor ?? {},
     aspects: aspectsOf(rule, options),
     bounds: (name) => options.bounds?.[name] ?? rule.bounds[name] ?? open,
     group(name) {
@@ -81,8 +83,10 @@ export function fitProblem(
       made.set(name, problem);
       return problem;
     },
-    refit({ observations: other = observations, errors = options.errors, start, intervals }) {
-      const { groups, ...rest } = options;
+    refit(changes) {
+      const { observations: other = observations, errors = options.errors, start, intervals } = changes;
+      const { groups: before, ...rest } = options;
+      const groups = changes.groups ?? before;
       return fitAgain(rule, other, {
         ...rest,
         errors,

@@ -27,7 +27,7 @@ export interface GroupProblem {
   readonly findsSigma: boolean;
   /** Where the trajectory begins that leads on after a period; by default after the last one recorded. */
   readonly beginning: (after?: number) => Beginning;
-  /** The residuals that the error distribution calls for when they are tested: `raw`, or `quantile` of counts and limits. */
+  /** The residuals to be tested: `raw`, `quantile` of counts and limits, `pearson` of a filter's predictions. */
   readonly tested: ResidualKind;
   readonly residuals: (kind: ResidualKind, stream: RandomStream) => Float64Array;
   /** The fit with one unknown held, from where another one ended; undefined where the rule cannot be run there. */
@@ -70,7 +70,7 @@ export function groupProblem(
     findsSigma: kind !== "state-space" && !counts && options.sd === undefined,
     beginning: (after = recorded.index[recorded.index.length - 1]!) =>
       beginningOf(rule, recorded, fitted, options, scaleOf(options), after),
-    tested: kind === "likelihood" ? "quantile" : "raw",
+    tested: ({ "least-squares": "raw", likelihood: "quantile", "state-space": "pearson" } as const)[kind],
     residuals(wanted, stream) {
       if (together) return Float64Array.from(fitted.points, ({ residual }) => residual);
       const at = estimatesIn(search().unknowns, fitted);

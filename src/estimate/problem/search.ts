@@ -1,6 +1,7 @@
 import type { RandomStream, Warning } from "../../numeric/index.js";
 import type { ObservedGroup } from "../../record/index.js";
 import type { Criteria } from "../result/criteria.js";
+import type { Overdispersion } from "../result/overdispersion.js";
 import type { FitRows } from "../rows/fit-rows.js";
 import type { Cut } from "../search/cut.js";
 import type { Objective } from "../search/objective.js";
@@ -16,6 +17,8 @@ export interface Measures {
   readonly criteria: Criteria;
   /** Standard deviation of an error of weight 1; undefined where the residuals' own is meant, or there are several. */
   readonly sigma: number | undefined;
+  /** Of a Poisson fit. */
+  readonly overdispersion?: Overdispersion;
   /** Whether intervals and errors are those of n - p degrees of freedom (least squares), or of large samples. */
   readonly exact: boolean;
 }

@@ -20,7 +20,7 @@ export function describeFit(
   searched: Searched,
   options: FitOptions,
   found: Optimum,
-  { criteria, sigma, exact }: Omit<Measures, "criteria"> & { readonly criteria?: Criteria },
+  { criteria, sigma, exact, overdispersion }: Omit<Measures, "criteria"> & { readonly criteria?: Criteria },
 ): GroupFit {
   const { group, unknowns, rows } = searched;
   const degreesOfFreedom = rows.count - unknowns.names.length;
@@ -44,6 +44,7 @@ export function describeFit(
     degreesOfFreedom,
     sigma: sigma ?? Math.sqrt(sumOfSquares / degreesOfFreedom),
     ...(criteria && { criteria }),
+    ...(overdispersion && { overdispersion }),
     cut: found.cut.cut,
     stop: found.stop,
     points,

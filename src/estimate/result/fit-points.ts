@@ -1,4 +1,4 @@
-import type { ObservedGroup } from "../../record/index.js";
+import { labelAt, type ObservedGroup } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
 import type { FitRows } from "../rows/fit-rows.js";
 import type { Optimum } from "../search/optimum.js";
@@ -10,6 +10,8 @@ export interface FitPoint {
   readonly index: number;
   /** The period column's value there. */
   readonly time: number;
+  /** The label of the period, where periods are not mere numbers. */
+  readonly label?: string;
   readonly row: number;
   readonly observed: number;
   readonly fitted: number;
@@ -39,6 +41,7 @@ export function fitPoints(
       state,
       index: group.index[entry]!,
       time: group.time[entry]!,
+      ...(group.axis.counts !== "numbers" && { label: labelAt(group.axis, group.index[entry]!) }),
       row: group.rows[entry]!,
       observed: rows.observed[i]!,
       fitted: rows.fitted(),

@@ -85,7 +85,7 @@ function groupCheck(
 ): GroupCheck {
   const found = {
     group: group.group,
-    tests: residualTests(fit, group),
+    tests: residualTests(fit, group, stream.jump()),
     windows: windows(fit, group),
     lackOfFit: lackOfFit(fit, group),
     recovery: recovery(fit, group, refits, stream),

@@ -31,8 +31,10 @@ export function likelihoodRatios(
 ): readonly LikelihoodRatio[] {
   return fits.flatMap((smaller, s) =>
     fits.flatMap((larger, l) => {
-      if (smaller === larger || !areLike(smaller, larger)) return [];
-      const nesting = nestingOf(smaller, larger);
+      if (smaller === larger) return [];
+      const nesting = isCommonOf(smaller, larger)
+        ? { at: {} }
+        : areLike(smaller, larger) && nestingOf(smaller, larger);
       return nesting ? [ratioOf(smaller, larger, [labels[s]!, labels[l]!], nesting.at)] : [];
     }),
   );
@@ -42,6 +44,13 @@ export function likelihoodRatios(
 function areLike(one: Fit, other: Fit): boolean {
   const [a, b] = [problemOf(one), problemOf(other)];
   return a.distribution === b.distribution && a.groups === b.groups;
+}
+
+/** Whether one fit has the same parameters for all groups, and the other the same rule with each group's own. */
+function isCommonOf(one: Fit, other: Fit): boolean {
+  const [a, b] = [problemOf(one), problemOf(other)];
+  const sameRule = one.rule.text === other.rule.text && a.distribution === b.distribution;
+  return sameRule && a.groups === "combined" && b.groups === "separate";
 }
 
 function ratioOf(
@@ -70,7 +79,7 @@ function sentenceOf(ratio: Omit<LikelihoodRatio, "sentence">, edge: readonly str
   const where = Object.entries(ratio.at)
     .map(([name, value]) => `${name} = ${value}`)
     .join(", ");
-  const nested = `"${ratio.smaller}" is "${ratio.larger}" at ${where}`;
+  const nested = `"${ratio.smaller}" is "${ratio.larger}" ${where === "" ? "with the same parameters and sigma for all groups" : `at ${where}`}`;
   const numbers = `likelihood ratio ${ratio.statistic.toFixed(2)} on ${ratio.degreesOfFreedom}`;
   if (ratio.probability === undefined)
     return `${nested} (${numbers}); that lies on the edge of the range of ${edge.join(", ")}, so the chi-square distribution does not hold and no probability is given.`;

@@ -1,5 +1,6 @@
 import { type Fit, type FitOptions, problemOf } from "../../estimate/index.js";
 import type { Observations } from "../../record/index.js";
+import { ruleLabel } from "../../rule/index.js";
 import type { ErrorAdvice } from "../check/error-advice.js";
 import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseNothingFits } from "../refusals.js";
@@ -24,7 +25,9 @@ export interface ProposeOptions extends Omit<FitOptions, "errors" | "intervals">
 
 /** A rule that was tried on a record. */
 export interface ProposedRule {
+  /** In the catalogue: `rules[name]`. */
   readonly name: string;
+  /** What the rule is called. */
   readonly rule: string;
   readonly errors: "process" | "observation";
   readonly parameters: number;
@@ -52,6 +55,7 @@ export interface Proposal {
   readonly naiveHeldOut: { readonly name: string; readonly score: number } | undefined;
   readonly verdict: {
     readonly kind: "supported" | "undecided" | "none-adequate";
+    /** By their names in the catalogue. */
     readonly rules: readonly string[];
   };
   /** Fits of the supported rules, with intervals, ready for `check`, `compare` and `forecast`. */
@@ -139,7 +143,7 @@ function rowOf(standing: Standing, heldOut: number | undefined, beatenBy: string
     beatenBy === undefined ? reason : `clearly worse than "${beatenBy}" on the last fifth, held out`;
   return {
     name: tried.name,
-    rule: tried.fit.rule.text,
+    rule: ruleLabel(tried.fit.rule),
     errors: tried.errors,
     parameters: tried.unknowns,
     aicCorrected: tried.aicCorrected,

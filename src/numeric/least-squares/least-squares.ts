@@ -1,4 +1,5 @@
 import { covarianceFromTriangle } from "../algebra/covariance-from-triangle.js";
+import { freezeDeep } from "../freeze-deep.js";
 import { badBounds, badStart, otherNumberOf, tooFewResiduals } from "../refusals.js";
 import type { StopReason } from "../search/stop-reason.js";
 import { type Minimum, minimiseSquares } from "./minimise-squares.js";
@@ -108,7 +109,7 @@ function solution(system: ResidualSystem, found: Minimum, left: number): LeastSq
   const variance = left > 0 ? found.sumOfSquares / left : undefined;
   const { covariance, determined, rank } = covarianceFromTriangle(triangle, size);
   for (let i = 0; i < covariance.length; i++) covariance[i] = covariance[i]! * (variance ?? Number.NaN);
-  return Object.freeze({
+  return freezeDeep({
     kind: "least-squares",
     estimates: found.estimates,
     standardErrors: determined.map((known, i) =>

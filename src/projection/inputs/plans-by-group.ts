@@ -1,6 +1,7 @@
 import { type InputPlans, isByGroup } from "../../dynamics/index.js";
 import type { Fit } from "../../estimate/index.js";
 import { inputByPeriod, type Observations, periodsAfter } from "../../record/index.js";
+import type { ForecastOptions } from "../forecast-options.js";
 import { refuseSharedPlan, refuseStrangeGroup } from "../refusals.js";
 
 /**
@@ -13,14 +14,27 @@ import { refuseSharedPlan, refuseStrangeGroup } from "../refusals.js";
 export function checkPlansByGroup({ rule, observations, groups }: Fit, plans: InputPlans): void {
   const names = groups.map(({ group }) => group);
   for (const [input, plan] of Object.entries(plans)) {
-    if (isByGroup(plan)) {
-      const strange = Object.keys(plan.byGroup).find((name) => !names.includes(name));
-      if (strange !== undefined) throw refuseStrangeGroup(input, strange, names);
-    } else if (names.length > 1 && rule.inputs.includes(input)) {
+    if (isByGroup(plan)) refuseStrangers(`Invalid plan for \`${input}\``, plan.byGroup, names);
+    else if (names.length > 1 && rule.inputs.includes(input)) {
       const last = ownLastValues(observations, input);
       if (last !== undefined) throw refuseSharedPlan(input, last);
     }
   }
+}
+
+/** @throws {ModelError} `plan-not-readable` where a start is given for a group that the fit does not have. */
+export function checkStartsByGroup({ groups }: Fit, from: ForecastOptions["from"]): void {
+  if (typeof from !== "object") return;
+  refuseStrangers(
+    "Option `from`",
+    from.byGroup,
+    groups.map(({ group }) => group),
+  );
+}
+
+function refuseStrangers(where: string, byGroup: object, names: readonly string[]): void {
+  const strange = Object.keys(byGroup).find((name) => !names.includes(name));
+  if (strange !== undefined) throw refuseStrangeGroup(where, strange, names);
 }
 
 /** The last recorded value of each group, where groups have values of their own and these differ in the end. */

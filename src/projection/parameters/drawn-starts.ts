@@ -1,5 +1,7 @@
+import { boundedPath } from "../../dynamics/index.js";
 import { type Fit, type GroupFit, problemOf } from "../../estimate/index.js";
 import { choleskyFactor, type RandomStream } from "../../numeric/index.js";
+import { stateBounds } from "../../rule/index.js";
 import { blockSize } from "../ensemble/block-streams.js";
 import type { Starts } from "../ensemble/ensemble.js";
 import type { FitGround } from "../fit-ground.js";
@@ -17,7 +19,9 @@ export interface DrawnStarts extends Starts {
   readonly followed: string | undefined;
   /** [paths]: sigma of each draw as a multiple of the estimate; absent where other spreads were fitted. */
   readonly spread: Float64Array | undefined;
-  /** Draws thrown away because an unknown left its bounds. */
+  /** By state: [paths], the factor through which each draw's record reads it. */
+  readonly factors: readonly (Float64Array | undefined)[];
+  /** Draws thrown away because an unknown left its bounds, or the path through the record those of a state. */
   readonly discarded: number;
 }
 
@@ -55,7 +59,13 @@ export function unknownsDraw(fit: Fit, group: GroupFit): UnknownsDraw {
   return { draw, method: "around the estimates", followed: undefined };
 }
 
-/** Draws a start for every path; one whose unknowns leave their bounds is drawn again. */
+/** What is drawn for one path. */
+interface DrawnRow {
+  readonly parameters: Float64Array;
+  readonly initial: Float64Array;
+}
+
+/** Draws a start for every path; one that cannot be meant is drawn again. */
 export function drawnStarts(
   fit: Fit,
   ground: FitGround,
@@ -68,27 +78,40 @@ export function drawnStarts(
   const parameters = new Float64Array(paths * size);
   const initial = new Float64Array(paths * width);
   const unknowns = new Float64Array(ground.group.estimates.length);
-  const stands = boundsOf(fit, ground.group);
+  const stands = standsOf(fit, ground);
   const begin = beginning(ground);
   const spread = new Float64Array(paths);
+  const factors = ground.factors.map((factor) => factor && new Float64Array(paths));
   let discarded = 0;
   for (let path = 0; path < paths; path++) {
     const stream = streams[Math.floor(path / blockSize)]!;
-    spread[path] = source.draw(stream, unknowns);
-    while (!stands(unknowns)) {
+    const own = {
+      parameters: parameters.subarray(path * size, (path + 1) * size),
+      initial: initial.subarray(path * width, (path + 1) * width),
+    };
+    spread[path] = drawOne(stream, own);
+    while (!stands(unknowns, own)) {
       if (++discarded > patience * (path + 1)) throw refuseNoDraws(ground.group.group);
-      spread[path] = source.draw(stream, unknowns);
+      spread[path] = drawOne(stream, own);
     }
-    parameters.set(ground.parameters, path * size);
-    initial.set(begin(stream), path * width);
-    ground.places.forEach((place, i) => {
-      if (place >= size) initial[path * width + place - size] = unknowns[i]!;
-      else if (place >= 0) parameters[path * size + place] = unknowns[i]!;
+    ground.factors.forEach((factor, s) => {
+      if (factor !== undefined) factors[s]![path] = unknowns[factor.unknown]!;
     });
   }
   const { method, followed } = source;
   const sigma = problemOf(fit).group(ground.group.group).findsSigma ? spread : undefined;
-  return { paths, size, parameters, initial, method, followed, spread: sigma, discarded };
+  return { paths, size, parameters, initial, method, followed, spread: sigma, factors, discarded };
+
+  function drawOne(stream: RandomStream, own: DrawnRow): number {
+    const widened = source.draw(stream, unknowns);
+    own.parameters.set(ground.parameters);
+    own.initial.set(begin(stream));
+    ground.places.forEach((place, i) => {
+      if (place >= size) own.initial[place - size] = unknowns[i]!;
+      else if (place >= 0) own.parameters[place] = unknowns[i]!;
+    });
+    return widened;
+  }
 }
 
 /** The first state vector of a path: known, or drawn from what a filter believes of it. */
@@ -107,10 +130,19 @@ function beginning({ belief, initial }: FitGround): (stream: RandomStream) => Fl
   };
 }
 
-function boundsOf(fit: Fit, group: GroupFit): (unknowns: Float64Array) => boolean {
-  const { bounds } = problemOf(fit);
-  const limits = group.estimates.map(({ name }) => bounds(name));
-  return (unknowns) => limits.every(([low, high], i) => unknowns[i]! >= low && unknowns[i]! <= high);
+/**
+ * Whether a draw can be meant: its unknowns lie within their bounds, and its path through the record within those of the
+ * states, where the fitted path does. A stock that dies out within the record contradicts the readings after it.
+ */
+function standsOf(fit: Fit, ground: FitGround): (unknowns: Float64Array, own: DrawnRow) => boolean {
+  const { group, rule, compiled, inputs, from, present: periods } = ground;
+  const limits = group.estimates.map(({ name }) => problemOf(fit).bounds(name));
+  const bounds = stateBounds(rule);
+  const stays = (own: DrawnRow): boolean =>
+    boundedPath(compiled, bounds, { ...own, inputs, from, periods }).reached.length === 0;
+  const looked = periods > 0 && rule.states.some((state) => rule.bounds[state]) && stays(ground);
+  return (unknowns, own) =>
+    limits.every(([low, high], i) => unknowns[i]! >= low && unknowns[i]! <= high) && (!looked || stays(own));
 }
 
 function openNames(group: GroupFit): readonly string[] {

@@ -11,6 +11,7 @@ import { momentText, monthText, type PeriodForm, type PeriodText, periodText } f
  * of the series that the axis belongs to.
  */
 export interface PeriodAxis {
+  readonly kind: "period-axis";
   /** The period column, or "year, week" for a pair. */
   readonly column: string;
   /** Unit of the step: "month". */

@@ -9,7 +9,8 @@ import { placedRows } from "./placed-rows.js";
 export function numberAxis(origin: number, period: string | StepLength): PeriodAxis {
   const step = typeof period === "string" ? { every: 1, of: period } : period;
   const { every, of } = step;
-  return Object.freeze({
+  return {
+    kind: "period-axis",
     column: of,
     unit: of,
     step,
@@ -17,7 +18,7 @@ export function numberAxis(origin: number, period: string | StepLength): PeriodA
     counts: "numbers",
     origin,
     stride: every,
-  });
+  };
 }
 
 /**
@@ -28,5 +29,5 @@ export function numberAxis(origin: number, period: string | StepLength): PeriodA
 export function calendarAxis(label: string, period: string | StepLength): PeriodAxis {
   const placed = placedRows(tableOf({ startsAt: [label] }), "startsAt", period as CalendarName | StepLength);
   const one = Int32Array.of(0);
-  return Object.freeze({ ...axisOfRows(placed, { rows: one, index: one }), column: placed.calendar.step.of });
+  return { ...axisOfRows(placed, { rows: one, index: one }), column: placed.calendar.step.of };
 }

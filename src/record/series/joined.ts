@@ -22,7 +22,7 @@ export function joined(record: Observations, later: Observations): Observations 
     record.counts[key] + later.counts[key];
   return {
     ...record,
-    groups: groups,
+    groups,
     axis: groups.length === 1 ? groups[0]!.axis : record.axis,
     findings: [
       ...record.findings,

@@ -1,9 +1,10 @@
 import { type ColumnTable, columnNamed } from "../column-table.js";
 import { numberColumn } from "../number-column.js";
+import type { Measured } from "../observation-options.js";
 import type { StepLength } from "../observations.js";
 import { type CalendarName, numberOfMoment } from "../period/calendar.js";
 import { type PlacedRows, placedRows } from "../period/placed-rows.js";
-import { optionWrong } from "../refusals.js";
+import { optionMissing, optionWrong } from "../refusals.js";
 import { tableOfRows } from "../table-of-rows.js";
 import { type PeriodsOf, type PlacedSeries, placed } from "./placed-series.js";
 import { type Summary, summaryOf } from "./summary-of.js";
@@ -11,8 +12,10 @@ import { type Summary, summaryOf } from "./summary-of.js";
 /** Which longer period to count by, and how each column is taken over it. */
 export interface ToPeriodsOptions extends PeriodsOf {
   readonly to: StepLength | CalendarName;
-  /** A flow adds up ("sum"); a level at an instant is its "last" one. */
-  readonly take: Readonly<Record<string, Summary>>;
+  /** By column, how its values become one. */
+  readonly take?: Readonly<Record<string, Summary>>;
+  /** By column, what it is: of a level the last value is taken, of a flow the sum. */
+  readonly measured?: Readonly<Record<string, Measured>>;
 }
 
 /**
@@ -28,7 +31,7 @@ export function toPeriods(record: ColumnTable, options: ToPeriodsOptions): Colum
   const { of } = periods.calendar.step;
   if (periods.moments === undefined && longer.calendar.step.of !== of)
     throw optionWrong("to", options.to, `a number of ${of}, because the periods are numbers and not dates`);
-  const taken = Object.entries(options.take).map(([name, take]) => ({
+  const taken = Object.entries(summariesOf(options)).map(([name, take]) => ({
     name,
     summary: summaryOf(take),
     values: numberColumn(columnNamed(table, name, "a column to take over"), name).values,
@@ -49,6 +52,20 @@ export function toPeriods(record: ColumnTable, options: ToPeriodsOptions): Colum
     }));
   });
   return tableOfRows(rows);
+}
+
+/** What is taken of each column: stated, or by what the column is. */
+function summariesOf({ take = {}, measured = {} }: ToPeriodsOptions): Readonly<Record<string, Summary>> {
+  const byKind = Object.entries(measured).map(([name, kind]): [string, Summary] => {
+    if (kind !== "level" && kind !== "flow") throw optionWrong("measured", kind, "one of level, flow");
+    return [name, kind === "flow" ? "sum" : "last"];
+  });
+  if (byKind.length + Object.keys(take).length === 0)
+    throw optionMissing(
+      "take",
+      'Say what becomes of each column: measured: { paid: "flow", owed: "level" }.',
+    );
+  return { ...Object.fromEntries(byKind), ...take };
 }
 
 function rowsByPeriod({ rows }: PlacedSeries, longer: PlacedRows): ReadonlyMap<number, readonly number[]> {
