@@ -25,7 +25,7 @@ export function squaresFit(rule: Rule, recorded: ObservedGroup, options: FitOpti
   const whole = robust === undefined ? first : prepared(rule, group, unknowns, options);
   const { count, size } = whole.rows;
   const found = optimum(
-    squaresObjective(whole.system),
+    squaresObjective(whole.system, whole.rows),
     unknowns,
     starts,
     (sum) => cutOf(sum, count, size, options),

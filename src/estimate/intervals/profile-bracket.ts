@@ -11,9 +11,16 @@ const leastDoublings = 8;
 const precision = 1e-9;
 /** Values whose ratio is larger are compared on the scale of their logarithms. */
 const farApart = 4;
-/** Each step towards 0 where the profile is followed there, and how many are taken. */
-const shrink = 1e-3;
-const shrinks = 8;
+/** Each step towards 0 where the profile is followed there, how many are taken, and what counts as level there. */
+const shrink = 0.01;
+const shrinks = 10;
+const levelStep = 0.01;
+
+/** Careful steps: the first and the least as a share of the distance, how many, and how many times the distance is enough. */
+const firstStep = 1e-3;
+const leastStep = 1e-6;
+const steps = 100;
+const farEnough = 256;
 
 /** One side of a profile. */
 export interface Way {
@@ -32,11 +39,16 @@ export interface Bracket {
   readonly outside: ProfilePoint;
 }
 
+/** The bracket of a side, and the highest excess met on or beyond it. */
+export interface Reached extends Bracket {
+  readonly highest: number;
+}
+
 /**
  * The places at doubling distances between which the cut is passed for good, and the highest excess met beyond: until
  * it is firm, the bound is reached, or the profile stays level.
  */
-export function outward(walk: ProfileWalk, way: Way): (Bracket & { readonly highest: number }) | undefined {
+export function outward(walk: ProfileWalk, way: Way): Reached | undefined {
   const met: ProfilePoint[] = [outermost(walk, way)];
   let level = 0;
   for (const { value, made } of placesBeyond(way, met[0]!.value)) {
@@ -48,6 +60,32 @@ export function outward(walk: ProfileWalk, way: Way): (Bracket & { readonly high
   const last = met.map(({ excess }) => excess < 0).lastIndexOf(true);
   const outside = met[last + 1];
   return outside && { inside: met[last]!, outside, highest: Math.max(...met.map(({ excess }) => excess)) };
+}
+
+/**
+ * The places between which the cut is passed, by steps that grow as long as a search can follow them and shrink where
+ * it cannot: along a narrow curved valley a doubled distance leads out of it. Undefined where the cut is not passed.
+ */
+export function carefully(walk: ProfileWalk, way: Way, from: ProfilePoint): Reached | undefined {
+  const { estimate, bound, firm, root } = way;
+  const direction = Math.sign(way.spacing);
+  const first = Math.abs(from.value - estimate);
+  let here = from;
+  let inside = from;
+  let outside: ProfilePoint | undefined;
+  let step = firstStep * first;
+  for (let k = 0; k < steps && Math.abs(here.value - estimate) < farEnough * first; k++) {
+    const free = here.value + direction * step;
+    const next = walk.at(direction > 0 ? Math.min(free, bound) : Math.max(free, bound));
+    const isFollowed = next.excess - here.excess < root || step < leastStep * first;
+    step *= isFollowed ? 2 : 0.25;
+    if (!isFollowed) continue;
+    if (next.excess < 0) inside = next;
+    outside = next.excess < 0 ? undefined : (outside ?? next);
+    here = next;
+    if (next.excess >= firm || next.value === bound) break;
+  }
+  return outside && { inside, outside, highest: here.excess };
 }
 
 /** The point within the cut that lies farthest out. */
@@ -86,10 +124,10 @@ export function narrowed(walk: ProfileWalk, { root }: Way, bracket: Bracket): Br
   for (let k = 1; k <= shrinks && level < 2; k++) {
     const next = walk.at(inside.value * shrink ** k);
     if (next.excess >= 0) return { inside: here, outside: next };
-    level = Math.abs(next.excess - here.excess) < flat * root ? level + 1 : 0;
+    level = Math.abs(next.excess - here.excess) < levelStep * root ? level + 1 : 0;
     here = next;
   }
-  return zero.excess - here.excess < flat * root ? { inside: here, outside: zero } : undefined;
+  return zero.excess - here.excess < levelStep * root ? { inside: here, outside: zero } : undefined;
 }
 
 /** The value inside a bracket at which the profile meets its cut, by Newton's iteration kept between its ends. */

@@ -1,4 +1,4 @@
-import { crossing, narrowed, outward, type Way } from "./profile-bracket.js";
+import { carefully, crossing, narrowed, outward, type Way } from "./profile-bracket.js";
 import { type ProfileProblem, type ProfileWalk, profileWalk } from "./profile-walk.js";
 
 /** A profile: its limits, and the places it was computed at for a plot. */
@@ -78,7 +78,9 @@ function side(
     firm: Math.sqrt(problem.firmCut) - root,
   };
   const found =
-    estimate === bound || problem.unbounded[i] === direction ? undefined : limitOn(walk, way, rounds);
+    estimate === bound || problem.unbounded[i] === direction
+      ? undefined
+      : limitOn(walk, way, problem.separable[i]!);
   if (found === undefined) {
     const where = Number.isFinite(bound) ? `before the bound ${bound}` : "from this record";
     return { limit: undefined, firm: false, note: `no ${name} limit ${where}` };
@@ -87,19 +89,30 @@ function side(
   return { ...found, note };
 }
 
+/**
+ * The limit on one side; undefined where there is none. A jump of the profile is a limit where the rule breaks down; of
+ * an unknown that others make up for it tells only that the search could not follow them, and a rise because another
+ * unknown was stopped short tells nothing either.
+ */
 function limitOn(
   walk: ProfileWalk,
   way: Way,
-  left: number,
+  jumpsCount: boolean,
 ): { readonly limit: number; readonly firm: boolean } | undefined {
-  const reached = outward(walk, way);
-  const bracket = reached && narrowed(walk, way, reached);
-  if (bracket === undefined) return undefined;
-  const { value, inside, outside } = crossing(walk, way, bracket);
-  // Where the profile jumps, a search that went astray is looked for just outside, else at the limit itself.
-  const jumps = value === inside.value && outside.excess - inside.excess > met * way.root;
-  const checked = walk.at(jumps ? outside.value : value, true);
-  const isPassed = checked.excess < (jumps ? 0 : -met * way.root);
-  if (isPassed && left > 0) return limitOn(walk, way, left - 1);
-  return { limit: value, firm: reached!.highest >= way.firm };
+  let reached = outward(walk, way);
+  for (let round = 0; reached !== undefined; round++) {
+    const bracket = narrowed(walk, way, reached);
+    if (bracket === undefined) return undefined;
+    const { value, inside, outside } = crossing(walk, way, bracket);
+    // Where the profile jumps, a search that went astray is looked for just outside, else at the limit itself.
+    const jumps = value === inside.value && outside.excess - inside.excess > met * way.root;
+    const checked = walk.at(jumps ? outside.value : value, true);
+    const isPassed = checked.excess < (jumps ? 0 : -met * way.root);
+    if (!isPassed || round === rounds)
+      return (jumps && !jumpsCount) || outside.isHeldBack
+        ? undefined
+        : { limit: value, firm: reached.highest >= way.firm };
+    reached = jumps ? carefully(walk, way, checked) : outward(walk, way);
+  }
+  return undefined;
 }

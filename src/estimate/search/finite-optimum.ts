@@ -3,7 +3,7 @@ import type { Lowest, Objective } from "./objective.js";
 import { isStopped, type SearchBounds } from "./search-bounds.js";
 
 /** A rise of the objective over a decade that does not count, in units of the variance. */
-const negligible = 1e-6;
+const negligible = 1e-5;
 /** Decades over which the objective must stay level before an unknown counts as run off, and decades looked at. */
 const levelDecades = 2;
 const decades = 12;
@@ -67,13 +67,16 @@ function ledBack(
     objective,
     estimates,
     value: best.value,
-    ...admitted,
+    // Nothing is let out beyond where the search ended: a rise because another unknown is stopped is told by that.
+    ...within,
     within,
     unbounded: new Int8Array(estimates.length),
     variance,
     covariance: new Float64Array(estimates.length ** 2).fill(Number.NaN),
     others: [],
     starts: [],
+    separable: [],
+    effort: { left: Number.POSITIVE_INFINITY },
     cut: Number.POSITIVE_INFINITY,
     firmCut: Number.POSITIVE_INFINITY,
   };
@@ -85,8 +88,10 @@ function ledBack(
   let level = estimates;
   for (let k = 1; k <= decades; k++) {
     const here = walk.at(estimates[i]! / 10 ** k);
-    if (here.increase > negligible)
-      return stopped || k > levelDecades ? { level, inner: here.estimates } : undefined;
+    if (here.increase > negligible) {
+      const other = here.estimates.some((value, j) => j !== i && isStopped(value, j, admitted, within));
+      return (stopped || k > levelDecades) && !other ? { level, inner: here.estimates } : undefined;
+    }
     level = here.estimates;
   }
   return undefined;
