@@ -10,7 +10,7 @@ interface Inherited {
 }
 
 /** Parts of a result that are results themselves and have tables of their own. */
-const apart = new Set(["observations", "rule", "fit", "forecast"]);
+const apart = new Set(["observations", "rule", "fit", "forecast", "period-axis"]);
 
 /**
  * The tables of any result: its single values as "summary", and every list in it as a table of the list's name,

@@ -1,3 +1,4 @@
+import { percent } from "../wording/index.js";
 import { type Axis, type Figure, figure, type Panel } from "./figure.js";
 import type { Layer } from "./layer.js";
 import { type DrawnLine, type RecordedSeries, recordedStyle } from "./recorded-series.js";
@@ -18,6 +19,8 @@ export interface DrawnBand {
 export interface ProjectedSeries {
   /** "" when there is a single series. */
   readonly name: string;
+  /** Its own horizontal axis, where that of the figure does not hold. */
+  readonly x?: Axis;
   readonly recorded: RecordedSeries;
   readonly central: DrawnLine;
   readonly bands: readonly DrawnBand[];
@@ -44,7 +47,7 @@ export function fanFigure({ title, x, y, series, threshold, event, notes = [] }:
   const panels = series.map(
     (each): Panel => ({
       title: each.name,
-      x,
+      x: each.x ?? x,
       y,
       layers: [
         ...fanLayers(each),
@@ -64,7 +67,6 @@ export function fanFigure({ title, x, y, series, threshold, event, notes = [] }:
 
 function fanLayers({ recorded, central, bands, recordEnd, horizon }: ProjectedSeries): Layer[] {
   const nested = [...bands].sort((a, b) => b.level - a.level);
-  const percent = (level: number): string => `${Number((100 * level).toPrecision(4))}%`;
   return [
     ...nested.map(({ level, of, x, lower, upper }, turn): Layer => {
       return { mark: "band", name: `${percent(level)} ${of}`, x, lower, upper, nested: turn, style: 0 };

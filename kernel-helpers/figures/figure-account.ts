@@ -1,6 +1,7 @@
-import type { Figure, Panel } from "./figure.js";
+import type { Axis, Figure, Panel } from "./figure.js";
 import type { Layer, Places } from "./layer.js";
 import { significant } from "./number-text.js";
+import { placeText } from "./period-places.js";
 import { axisTitle } from "./plot-text.js";
 
 /** What a figure shows, in sentences: for a reader who does not see it. */
@@ -13,10 +14,10 @@ function panelAccount(panel: Panel): string[] {
   const name = panel.title === "" ? "" : `Panel "${panel.title}". `;
   const axes = `${name}Across: ${axisTitle(panel.x)}; upwards: ${axisTitle(panel.y)}.`;
   const said = panel.layers.filter((layer) => layer.mark !== "label" && layer.inLegend !== false);
-  return [axes, ...said.map(layerAccount)];
+  return [axes, ...said.map((layer) => layerAccount(layer, panel.x))];
 }
 
-function layerAccount(layer: Layer): string {
+function layerAccount(layer: Layer, across: Axis): string {
   switch (layer.mark) {
     case "points":
       return `${layer.name}: ${layer.x.length} points, ${span(layer.y)}.`;
@@ -29,7 +30,7 @@ function layerAccount(layer: Layer): string {
     case "threshold":
       return `${layer.name}: level ${significant(layer.y)}.`;
     case "vertical":
-      return `${layer.name}: marked at ${typeof layer.x === "number" ? significant(layer.x) : layer.x}.`;
+      return `${layer.name}: marked at ${placeText(across, layer.x)}.`;
     case "label":
       return layer.name;
     case "arrow":

@@ -3,7 +3,7 @@ import {
   escapeHtml,
   look,
   oneLine,
-  raised,
+  superscript,
   type Table,
   tableHtml,
   typeface,
@@ -37,7 +37,7 @@ export function figureHtml({ figure, numbers, notes, picture, library }: FigureP
   const image = picture
     ? `<img class="pw-picture" src="data:image/png;base64,${picture}" alt="${title}. ${account}" style="max-width:100%;height:auto">`
     : "";
-  const shownNotes = notes.map((note) => `<p dir="auto">${escapeHtml(raised(note))}</p>`).join("");
+  const shownNotes = notes.map((note) => `<p dir="auto">${escapeHtml(superscript(note))}</p>`).join("");
   const plot = plotJson(figure);
   // By what it draws: the same figure shown twice is drawn twice, each time in the next box that waits for it.
   const name = createHash("sha256").update(plot).digest("hex").slice(0, 16);

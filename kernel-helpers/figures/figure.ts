@@ -1,3 +1,5 @@
+import { frozenCopy } from "../../src/numeric/index.js";
+import type { PeriodAxis } from "../../src/record/index.js";
 import { type Bundle, showing, type Table } from "../tables/index.js";
 import { figureBundle } from "./figure-bundle.js";
 import type { Layer } from "./layer.js";
@@ -12,6 +14,8 @@ export interface Axis {
   readonly scale?: "linear" | "log" | "category" | "date";
   /** Ends of the axis, in its unit; default: what the layers need. */
   readonly ends?: readonly [number, number];
+  /** The periods that places on the axis stand for, where these have labels; `zero` is the place of period 0. */
+  readonly periods?: { readonly axis: PeriodAxis; readonly zero: number };
   /** Without ticks and grid: where places along the axis have no meaning of their own. */
   readonly bare?: boolean;
 }
@@ -58,16 +62,10 @@ export interface FigureOptions {
  *   layers: [{ mark: "points", name: "counted", x: [0, 1], y: [90, 83] }] });
  */
 export function figure(options: FigureOptions): Figure {
-  const { title, x, y, layers } = options;
-  const panels = options.panels ?? (x && y && layers ? [{ title: "", x, y, layers }] : []);
+  // Copies: the caller's lists must not be frozen, nor change the figure later.
+  const { title, x, y, layers, panels: given, summary = "", notes = [], numbers } = frozenCopy(options);
+  const panels = given ?? (x && y && layers ? [{ title: "", x, y, layers }] : []);
   if (panels.length === 0 || panels.some((panel) => panel.layers.length === 0)) throw emptyFigure(title);
-  const made: Figure = {
-    kind: "figure",
-    title,
-    panels: Object.freeze([...panels]),
-    summary: options.summary ?? "",
-    notes: Object.freeze([...(options.notes ?? [])]),
-    numbers: options.numbers,
-  };
+  const made: Figure = { kind: "figure", title, panels, summary, notes, numbers };
   return showing(made, (): Promise<Bundle> => figureBundle(made));
 }

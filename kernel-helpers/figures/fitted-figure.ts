@@ -7,6 +7,8 @@ import { sharedScale } from "./shared-scale.js";
 export interface FittedSeries {
   /** "" when the record has a single series. */
   readonly name: string;
+  /** Its own horizontal axis, where that of the figure does not hold. */
+  readonly x?: Axis;
   readonly observed: RecordedSeries;
   /** Single readings behind the observed values, drawn hollow. */
   readonly replicates?: RecordedSeries;
@@ -24,7 +26,9 @@ export interface FittedFigureOptions {
 
 /** Observed values against fitted paths, a panel a series; rivals are lines of different dash and colour. */
 export function fittedFigure({ title, x, y, series, notes = [] }: FittedFigureOptions): Figure {
-  const panels = series.map((each): Panel => ({ title: each.name, x, y, layers: seriesLayers(each) }));
+  const panels = series.map(
+    (each): Panel => ({ title: each.name, x: each.x ?? x, y, layers: seriesLayers(each) }),
+  );
   return figure({ title, panels: sharedScale(panels), notes });
 }
 

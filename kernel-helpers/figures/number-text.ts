@@ -1,4 +1,4 @@
-import { numberFormat, significant as toDigits } from "../tables/index.js";
+import { numberFormat, significant as toDigits } from "../wording/index.js";
 
 /** A number in a sentence about a figure: four significant digits, in the number format in force; infinity as a word. */
 export function significant(value: number): string {

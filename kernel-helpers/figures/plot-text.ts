@@ -1,4 +1,4 @@
-import { oneLine, raised } from "../tables/index.js";
+import { oneLine, superscript } from "../tables/index.js";
 
 /**
  * Text for a plot's labels, which read a little HTML: shown as it is, broken into lines at words.
@@ -36,5 +36,5 @@ function brokenLines(text: string, columns: number, lines: number): string[] {
 /** "Density (10⁴ cells/mL)": what an axis measures, with its unit unless that is the same word. */
 export function axisTitle(axis: { readonly title: string; readonly unit?: string }): string {
   if (!axis.unit || axis.unit.toLowerCase() === axis.title.toLowerCase()) return axis.title;
-  return `${axis.title} (${raised(axis.unit)})`;
+  return `${axis.title} (${superscript(axis.unit)})`;
 }

@@ -1,6 +1,7 @@
 import type { Panel } from "./figure.js";
 import type { BandLayer, BarsLayer, Layer, LineLayer } from "./layer.js";
 import { type SeriesStyle, seriesStyle, tint } from "./palette.js";
+import { placeText } from "./period-places.js";
 import { plainValues } from "./plain-values.js";
 import { plotText } from "./plot-text.js";
 import { pointsTrace } from "./points-trace.js";
@@ -18,8 +19,19 @@ export function plotTraces(panel: Panel, at: number): PlotTrace[] {
     const style = seriesStyle(layer.style ?? turn);
     const trace = layerTrace(layer, style);
     if (trace === undefined) return [];
-    return [{ ...trace, ...axes, name: plotText(layer.name, 24, 2), showlegend: layer.inLegend !== false }];
+    const name = plotText(layer.name, 24, 2);
+    return [{ ...trace, ...hoverOf(panel, trace), ...axes, name, showlegend: layer.inLegend !== false }];
   });
+}
+
+/** Under the pointer a labelled period shows its label, not its place on the axis. */
+function hoverOf({ x }: Panel, trace: PlotTrace): PlotTrace {
+  const places = trace["x"];
+  if (x.periods === undefined || trace["hoverinfo"] === "skip" || !Array.isArray(places)) return {};
+  const text = places.map((place: unknown) =>
+    typeof place === "number" ? plotText(placeText(x, place), 28) : "",
+  );
+  return { text, hovertemplate: "%{text}, %{y}" };
 }
 
 /** "x", "x2", "x3": what the plotting library calls the axes of a panel. */

@@ -1,5 +1,6 @@
 import { type Axis, type Figure, figure } from "./figure.js";
 import type { Layer, PointsLayer } from "./layer.js";
+import { placeText } from "./period-places.js";
 import { brokenAtGaps, type RecordedSeries } from "./recorded-series.js";
 
 /** A recorded value that something was found about. */
@@ -46,7 +47,9 @@ export function recordFigure({ title, x, y, series, flagged = [], notes = [] }: 
     x: flagged.map((flag) => flag.x) as PointsLayer["x"],
     y: flagged.map((flag) => flag.y),
   };
-  const reasons = flagged.slice(0, listed).map((flag) => `Flagged at ${flag.x}: ${flag.why}`);
+  const reasons = flagged
+    .slice(0, listed)
+    .map((flag) => `Flagged at ${x.periods === undefined ? flag.x : placeText(x, flag.x)}: ${flag.why}`);
   if (flagged.length > listed) reasons.push(`${flagged.length - listed} more values are flagged.`);
   return figure({
     title,

@@ -1,10 +1,9 @@
-import { numberFormat, written } from "../tables/index.js";
+import { count } from "../wording/index.js";
 import type { Figure } from "./figure.js";
 import { thinned } from "./thinned.js";
 
 /** A sentence for every layer of which not all points are drawn. */
 export function thinningNotes(figure: Figure): string[] {
-  const count = (n: number): string => written(String(n), numberFormat());
   const notes = figure.panels
     .flatMap((panel) => panel.layers)
     .flatMap((layer) => {

@@ -1,5 +1,5 @@
 import { libraryAgain, warmPictures } from "../figures/index.js";
-import { type Bundle, escapeHtml, look, raised, showing, typeface, untypeset } from "../tables/index.js";
+import { type Bundle, escapeHtml, look, showing, superscript, typeface, untypeset } from "../tables/index.js";
 import { type CaseHead, caseLog, defaultSeed } from "./case-log.js";
 import { cautionOf, type Domain, domainCautions } from "./cautions.js";
 import { refuseEmptyAnswer, refuseNoCase, refuseUnanswered, refuseUnknownDomain } from "./refusals.js";
@@ -59,7 +59,7 @@ export function openCase(options: CaseOptions): void {
  * @example answer(`Draw down at hour 138. ${ready.sentence}`);
  */
 export function answer(said: string): void {
-  const sentence = raised(said);
+  const sentence = superscript(said);
   if (caseLog.head() === undefined) throw refuseNoCase("answer(...)");
   if (sentence.trim() === "") throw refuseEmptyAnswer();
   caseLog.noteAnswer(sentence);

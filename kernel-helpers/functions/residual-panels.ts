@@ -1,6 +1,8 @@
-import type { Fit, GroupFit } from "../../src/estimate/index.js";
+import { type Fit, type GroupFit, problemOf } from "../../src/estimate/index.js";
 import { normalQuantile } from "../../src/numeric/index.js";
+import { ruleLabel } from "../../src/rule/index.js";
 import { type Figure, figure, type Panel } from "../figures/index.js";
+import { acrossRecord } from "./across-periods.js";
 
 type Point = GroupFit["points"][number];
 
@@ -16,7 +18,7 @@ export function residualPanels(fit: Fit): readonly Figure[] {
       points: group.points.filter((point) => point.state === state),
     }));
     return figure({
-      title: `Residuals of ${fit.rule.text}${several ? `, ${state}` : ""}`,
+      title: `Residuals of ${ruleLabel(fit.rule)}${several ? `, ${state}` : ""}`,
       panels: panelsOf(fit, state, groups),
       summary:
         "Without pattern in the first three panels and on the line in the fourth where the rule and its errors are right.",
@@ -30,9 +32,9 @@ interface Series {
 }
 
 function panelsOf(fit: Fit, state: string, groups: readonly Series[]): Panel[] {
-  const { period, states } = fit.observations;
+  const { states } = fit.observations;
   const unit = states.find((each) => each.name === state)?.unit ?? "";
-  const log = fit.options.distribution === "lognormal";
+  const { log } = problemOf(fit).scale;
   const residual = { title: log ? "Residual of the logarithm" : "Residual", unit: log ? "" : unit };
   const before = groups.map(({ name, points }) => ({ name, pairs: neighbours(points) }));
   const zero = { mark: "threshold", name: "zero", y: 0, inLegend: false } as const;
@@ -51,7 +53,7 @@ function panelsOf(fit: Fit, state: string, groups: readonly Series[]): Panel[] {
   return [
     {
       title: "By period",
-      x: { title: period.column, unit: period.unit },
+      x: acrossRecord(fit.observations),
       y: residual,
       layers: [
         zero,

@@ -100,9 +100,9 @@ function sensitivityTable(found: Sensitivity): Table {
 export function showTradeoff(found: Tradeoff): readonly (Figure | Table)[] {
   const names = Object.keys(found.answers);
   const settings = found.rows.map((row) => row.value);
-  const isRisk = (name: string): boolean => "risk" in found.answers[name]!;
+  const isProbability = (name: string): boolean => "probability" in found.answers[name]!;
   const columns = names.flatMap((name): Column[] =>
-    isRisk(name)
+    isProbability(name)
       ? [
           { key: name, label: name, kind: "probability", pairedWith: `${name} error` },
           { key: `${name} error`, label: "Monte-Carlo error", kind: "number", digits: 1 },

@@ -1,6 +1,9 @@
 import type { Forecast, GroupForecast } from "../../src/projection/index.js";
+import { ruleLabel } from "../../src/rule/index.js";
 import { type FanFigureOptions, type Figure, fanFigure, type ProjectedSeries } from "../figures/index.js";
+import { groupName } from "../results/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
+import { acrossGroup, acrossRecord, periodColumn } from "./across-periods.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
 
 /** A forecast as a reader sees it: fans, then the numbers ahead, then how scenarios differ. */
@@ -9,20 +12,9 @@ export function showForecast(ahead: Forecast): readonly (Figure | Table)[] {
   return [...fanCharts(ahead), aheadTable(ahead), ...(contrast === undefined ? [] : [contrast])];
 }
 
-/** How a group and scenario are named together. */
-export function projectedName({
-  group,
-  scenario,
-}: {
-  readonly group: string;
-  readonly scenario: string;
-}): string {
-  return [group, scenario].filter((part) => part !== "").join(", ");
-}
-
 function fanCharts(ahead: Forecast): Figure[] {
   return ahead.fit.rule.states.map((state) =>
-    fanFigure({ ...fanOf(ahead, state), title: `Forecast of ${ahead.fit.rule.text}` }),
+    fanFigure({ ...fanOf(ahead, state), title: `Forecast of ${ruleLabel(ahead.fit.rule)}` }),
   );
 }
 
@@ -44,7 +36,7 @@ export function decidingFan(
 function fanOf(ahead: Forecast, state: string): Omit<FanFigureOptions, "title"> {
   const { observations } = ahead.fit;
   return {
-    x: { title: observations.period.column, unit: observations.period.unit },
+    x: acrossRecord(observations),
     y: { title: state, unit: observations.states.find((each) => each.name === state)?.unit ?? "" },
     series: ahead.groups.map((group) => projected(ahead, group, state)),
     notes: notesOf(ahead),
@@ -58,7 +50,8 @@ function projected(ahead: Forecast, group: GroupForecast, name: string): Project
   const end = group.index.indexOf(group.recordEnd);
   const horizon = group.predictability?.predictionHorizon;
   return {
-    name: projectedName(group),
+    name: groupName(group),
+    x: acrossGroup(recorded),
     recorded: { name: "recorded", x: recorded.time, y: recorded.values[name]! },
     central: { name: "fitted path", x, y: state.central },
     bands: state.bands
@@ -77,24 +70,16 @@ function aheadTable(ahead: Forecast): Table {
   const level = Math.max(...ahead.options.levels);
   const each = periodsShown(ahead.options.periods, ahead.groups.length * ahead.fit.rule.states.length);
   const rows = ahead.groups.flatMap((group) => rowsAhead(group, level, each));
-  const dated = ahead.groups.some((group) => group.labels !== undefined);
+  const { axis } = ahead.fit.observations;
   const unit = ahead.groups[0]?.states[0]?.unit ?? "";
   const number = { kind: "number", digits: 4, unit } as const;
   const percent = `${Number((100 * level).toPrecision(12))}%`;
   return table({
     title: "Periods ahead",
     columns: [
-      ...several("group", "Group", ahead.groups.map(projectedName)),
+      ...several("group", "Group", ahead.groups.map(groupName)),
       ...several("state", "State", ahead.fit.rule.states),
-      dated
-        ? { key: "time", label: ahead.fit.observations.period.column, kind: "text" }
-        : {
-            key: "time",
-            label: ahead.fit.observations.period.column,
-            kind: "number",
-            digits: 6,
-            grouped: false,
-          },
+      periodColumn("time", axis.column, axis),
       { key: "central", label: "Fitted path", ...number },
       { key: "meanLower", label: `Mean path ${percent}, from`, ...number },
       { key: "meanUpper", label: "to", ...number },
@@ -137,7 +122,7 @@ function rowsAhead(group: GroupForecast, level: number, each: number): Readonly<
       !shown.has(t)
         ? []
         : {
-            group: projectedName(group),
+            group: groupName(group),
             state: state.state,
             time: group.labels?.[t] ?? group.time[t],
             central: state.central[t],
@@ -158,7 +143,7 @@ function contrastTable(ahead: Forecast): Table | undefined {
     return group.states.map((state, s) => {
       const end = group.index.length - 1;
       const difference = state.central[end]! - first.states[s]!.central[end]!;
-      return { what: projectedName(group), than: first.scenario, state: state.state, difference };
+      return { what: groupName(group), than: first.scenario, state: state.state, difference };
     });
   });
   if (rows.length === 0) return undefined;
@@ -180,6 +165,6 @@ function notesOf(ahead: Forecast): string[] {
   return [
     "Mean path: uncertainty of the parameters. Future observation: that and the error of a single value.",
     `${paths} drawn paths, seed ${seed}; quantiles by definition 7.`,
-    ...cautionsByGroup(ahead.groups.map((group) => ({ ...group, group: projectedName(group) }))),
+    ...cautionsByGroup(ahead.groups.map((group) => ({ ...group, group: groupName(group) }))),
   ];
 }

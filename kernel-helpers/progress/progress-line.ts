@@ -1,4 +1,4 @@
-import { numberFormat, significant, written } from "../tables/index.js";
+import { count, numberFormat, percent, significant } from "../wording/index.js";
 import { durationText } from "./duration-text.js";
 
 /** How far a piece of work is. */
@@ -14,7 +14,9 @@ export interface Standing {
 export function progressLine({ label, done, total, seconds }: Standing): string {
   const rate = done / seconds;
   const parts = [
-    total === undefined ? `${count(done)} done` : `${count(done)} of ${count(total)} (${share(done, total)})`,
+    total === undefined
+      ? `${count(done)} done`
+      : `${count(done)} of ${count(total)} (${percent(Math.floor((100 * done) / total) / 100)})`,
     ...(done > 0 ? [`${each(rate)} a second`] : []),
     ...(done > 0 && total !== undefined ? [`${durationText((total - done) / rate)} left`] : []),
   ];
@@ -29,14 +31,6 @@ export function progressRecord(standing: Standing, stopped: boolean): string {
   return `${label}: ${whole} in ${durationText(seconds)}, ${each(done / seconds)} a second.`;
 }
 
-function count(n: number): string {
-  return written(String(n), numberFormat());
-}
-
 function each(rate: number): string {
   return significant(Number(rate.toPrecision(2)), 2, numberFormat());
-}
-
-function share(done: number, total: number): string {
-  return `${Math.floor((100 * done) / total)}%`;
 }

@@ -1,5 +1,13 @@
-import { decimalsFor, fixedDecimals, minorUnits } from "./fixed-decimals.js";
-import { type NumberFormat, written } from "./number-format.js";
+import {
+  decimalsFor,
+  fixedDecimals,
+  formatDigits,
+  minorUnits,
+  type NumberFormat,
+  percent,
+  powerOfTen,
+  significant,
+} from "../wording/index.js";
 import type { Column } from "./table.js";
 
 /** Shown where there is no value. */
@@ -17,14 +25,15 @@ export function cellText(column: Column, row: Row, signs: NumberFormat, decimals
   const format = signsOf(column, signs);
   const value = row[column.key];
   if (value === undefined || value === null || Number.isNaN(value)) return absent;
-  if (typeof value === "bigint") return written(wholeText(column, value, format), format);
+  if (typeof value === "bigint") return formatDigits(wholeText(column, value, format), format);
   if (typeof value === "number" && Number.isFinite(value) && decimals !== undefined) {
-    return written(fixedDecimals(value, decimals), format);
+    return formatDigits(fixedDecimals(value, decimals), format);
   }
   if (typeof value === "number") return numberText(column, value, row, format);
   if (typeof value === "boolean") return value ? "yes" : "no";
   if (value instanceof Date) return value.toISOString().slice(0, 10);
-  if (column.kind === "money" && /^-?\d+(\.\d+)?$/.test(String(value))) return written(String(value), format);
+  if (column.kind === "money" && /^-?\d+(\.\d+)?$/.test(String(value)))
+    return formatDigits(String(value), format);
   return String(value);
 }
 
@@ -42,15 +51,15 @@ function numberText(column: Column, value: number, row: Row, format: NumberForma
     case "text":
       return String(value);
     case "integer":
-      return written(fixedDecimals(value, Number.isInteger(value) ? 0 : 6), format);
+      return formatDigits(fixedDecimals(value, Number.isInteger(value) ? 0 : 6), format);
     case "number":
       return significant(value, column.digits ?? 4, format);
     case "estimate":
       return estimateText(column, value, row, format);
     case "money":
-      return written(fixedDecimals(value, column.digits ?? format.minorDigits), format);
+      return formatDigits(fixedDecimals(value, column.digits ?? format.minorDigits), format);
     case "percent":
-      return `${written(fixedDecimals(value, column.digits ?? 1, 2), format)}%`;
+      return percent(value, column.digits ?? 1, format);
     case "probability":
       return probabilityText(column, value, row, format);
   }
@@ -63,7 +72,7 @@ function estimateText(column: Column, value: number, row: Row, format: NumberFor
   // A standard error of 0.0000012 would push a column of zeros in front of every digit that counts.
   if (decimals > 8 || decimals < -6)
     return powerOfTen(value, Math.max(0, exponentOf(value) + decimals), format);
-  return written(fixedDecimals(value, decimals), format);
+  return formatDigits(fixedDecimals(value, decimals), format);
 }
 
 function probabilityText(column: Column, value: number, row: Row, format: NumberFormat): string {
@@ -71,24 +80,9 @@ function probabilityText(column: Column, value: number, row: Row, format: Number
   const decimals =
     error === undefined ? (column.digits ?? 3) : Math.max(1, Math.min(6, decimalsFor(error, 1)));
   const least = 10 ** -decimals;
-  if (value > 0 && value < least) return `<${written(fixedDecimals(least, decimals), format)}`;
-  if (value < 1 && value > 1 - least) return `>${written(fixedDecimals(1 - least, decimals), format)}`;
-  return written(fixedDecimals(value, decimals), format);
-}
-
-/** A number to so many significant digits; with a power of ten where plain digits would be mostly zeros. */
-export function significant(value: number, digits: number, format: NumberFormat): string {
-  if (value === 0) return "0";
-  const size = Math.abs(value);
-  if (size >= 1e9 || size < 1e-4) return powerOfTen(value, digits - 1, format);
-  // Digits before the point are never rounded away: 12,345 stays 12,345 at four digits.
-  const plain = fixedDecimals(value, Math.max(0, decimalsFor(value, digits)));
-  return written(plain.includes(".") ? plain.replace(/\.?0+$/, "") : plain, format);
-}
-
-function powerOfTen(value: number, decimals: number, format: NumberFormat): string {
-  const [mantissa = "", exponent = ""] = value.toExponential(Math.min(15, decimals)).split("e");
-  return `${written(mantissa, format)}e${Number(exponent)}`;
+  if (value > 0 && value < least) return `<${formatDigits(fixedDecimals(least, decimals), format)}`;
+  if (value < 1 && value > 1 - least) return `>${formatDigits(fixedDecimals(1 - least, decimals), format)}`;
+  return formatDigits(fixedDecimals(value, decimals), format);
 }
 
 function exponentOf(value: number): number {

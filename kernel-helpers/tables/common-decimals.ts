@@ -1,4 +1,4 @@
-import { decimalsFor, fixedDecimals } from "./fixed-decimals.js";
+import { decimalsFor, fixedDecimals } from "../wording/index.js";
 
 /** Beyond this ratio of greatest to least a column of numbers has no number of decimals that suits all. */
 const spread = 1e5;

@@ -1,9 +1,12 @@
-export { significant } from "./cell-text.js";
-export { escapeHtml, untypeset } from "./escape-html.js";
+export {
+  escapeHtml,
+  type NumberFormat,
+  numberFormat,
+  superscript,
+  untypeset,
+} from "../wording/index.js";
 export { look, typeface } from "./look.js";
-export { type NumberFormat, numberFormat, written } from "./number-format.js";
 export { oneLine } from "./plain-text.js";
-export { raised } from "./raised.js";
 export { type Bundle, bundleOf, showing } from "./show-itself.js";
 export { tabSeparated } from "./tab-separated.js";
 export {

@@ -1,7 +1,6 @@
+import { formatDigits, superscript } from "../wording/index.js";
 import { absent, cellText } from "./cell-text.js";
 import { commonDecimals } from "./common-decimals.js";
-import { written } from "./number-format.js";
-import { raised } from "./raised.js";
 import type { Column, Footnote, Table } from "./table.js";
 
 /** One cell ready to be drawn: its text, the letter of its footnote, and whether it is a number. */
@@ -81,12 +80,12 @@ export function headings({ columns, format }: Table): string[] {
     const ends = column.label === "to" && before.endsWith(", from");
     const label = ends ? before.replace(/from$/, "to") : column.label;
     const unit = column.unit || (column.kind === "money" ? format.currency : "");
-    return unit === "" ? label : `${label} (${raised(unit)})`;
+    return unit === "" ? label : `${label} (${superscript(unit)})`;
   });
 }
 
 function cutNote(head: number, tail: number, all: number, { format }: Table): string {
-  const count = (n: number): string => written(String(n), format);
+  const count = (n: number): string => formatDigits(String(n), format);
   const last = tail > 0 ? ` and ${count(all - tail + 1)} to ${count(all)}` : "";
   return `Rows 1 to ${count(head)}${last} of ${count(all)} are shown.`;
 }
@@ -106,8 +105,8 @@ function footnoteMarks(notes: Table["notes"]): {
         .map(letter)
         .join(","),
     notes: notes.map((note) => {
-      if (typeof note === "string") return { mark: "", text: raised(note) };
-      return { mark: placed.includes(note) ? letter(note) : "", text: raised(note.text) };
+      if (typeof note === "string") return { mark: "", text: superscript(note) };
+      return { mark: placed.includes(note) ? letter(note) : "", text: superscript(note.text) };
     }),
   };
 }

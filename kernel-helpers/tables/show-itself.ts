@@ -1,3 +1,5 @@
+import { freezeDeep } from "../../src/numeric/index.js";
+
 /** What is shown of a value: one representation a MIME type, `text/plain` always among them. */
 export type Bundle = Readonly<Record<string, string | object>>;
 
@@ -5,16 +7,19 @@ export type Bundle = Readonly<Record<string, string | object>>;
 const shows: unique symbol = Symbol.for("mime-bundle") as never;
 
 /**
- * Freezes a result and gives it a way to show itself that no listing, copy or comparison of it sees.
+ * Gives a result a way to show itself that no listing, copy or comparison of it sees, and freezes it to its last part.
  *
- * @param result - a plain object; an object already frozen cannot be given the method.
+ * The result is not copied: what is kept beside an object (a rule's graph and code) is found again under the same one.
+ *
+ * @param result - a plain object; one that shows itself already, or that somebody froze before, is left as it is.
  * @param bundle - makes the representations when a front end asks, not before.
  * @returns the same object, frozen.
  * @example showing({ kind: "note", text: "two gaps" }, () => ({ "text/plain": "two gaps" }));
  */
 export function showing<T extends object>(result: T, bundle: () => Bundle | Promise<Bundle>): Readonly<T> {
-  Object.defineProperty(result, shows, { value: bundle, enumerable: false });
-  return Object.freeze(result);
+  if (!Object.hasOwn(result, shows) && Object.isExtensible(result))
+    Object.defineProperty(result, shows, { value: bundle });
+  return freezeDeep(result);
 }
 
 /**

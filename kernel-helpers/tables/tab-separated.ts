@@ -1,4 +1,4 @@
-import { minorUnits } from "./fixed-decimals.js";
+import { minorUnits } from "../wording/index.js";
 import { headings } from "./laid-out.js";
 import { oneLine } from "./plain-text.js";
 import type { Column, Table } from "./table.js";

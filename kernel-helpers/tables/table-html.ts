@@ -1,7 +1,6 @@
-import { escapeHtml, untypeset } from "./escape-html.js";
+import { escapeHtml, superscript, untypeset } from "../wording/index.js";
 import { type Cell, laidOut } from "./laid-out.js";
 import { look, typeface } from "./look.js";
-import { raised } from "./raised.js";
 import { tabSeparated } from "./tab-separated.js";
 import type { Table } from "./table.js";
 
@@ -23,8 +22,8 @@ export function tableHtml(table: Table): string {
     .map(({ mark, text }) => `<p dir="auto">${mark === "" ? "" : `<b>${mark}</b> `}${escapeHtml(text)}</p>`)
     .join("");
   return [
-    `<div class="pw-table ${untypeset}">${tableStyle}<p class="pw-title" dir="auto">${escapeHtml(raised(table.title))}</p>`,
-    `<div class="pw-scroll"><table aria-label="${escapeHtml(raised(table.title))}">`,
+    `<div class="pw-table ${untypeset}">${tableStyle}<p class="pw-title" dir="auto">${escapeHtml(superscript(table.title))}</p>`,
+    `<div class="pw-scroll"><table aria-label="${escapeHtml(superscript(table.title))}">`,
     `<thead>${head}</thead><tbody>${rows.join("")}</tbody>${foot === "" ? "" : `<tfoot>${foot}</tfoot>`}`,
     `</table></div>${notes === "" ? "" : `<div class="pw-notes">${notes}</div>`}${copyButton(table)}</div>`,
   ].join("");

@@ -1,6 +1,6 @@
+import { superscript } from "../wording/index.js";
 import { type Cell, laidOut } from "./laid-out.js";
 import { displayWidth, oneLine, shortened } from "./plain-text.js";
-import { raised } from "./raised.js";
 import type { Table } from "./table.js";
 
 const widestCell = 44;
@@ -28,7 +28,7 @@ export function tableText(table: Table): string {
   const totals = body.slice(laid.rows.length);
   const notes = laid.notes.map(({ mark, text }) => (mark === "" ? "" : `${mark}: `) + oneLine(text));
   return [
-    oneLine(raised(table.title)),
+    oneLine(superscript(table.title)),
     "",
     top,
     rule,

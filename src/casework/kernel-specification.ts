@@ -3,15 +3,15 @@ import { homedir } from "node:os";
 import { join } from "node:path";
 import { installationFolder } from "../kernel/index.js";
 import type { KernelCommand } from "./client/kernel-process.js";
+import { foreignSpecificationError } from "./errors.js";
 import { logoPng, logoSvg } from "./logo.js";
-import { foreignSpecification } from "./refusals.js";
 
 const kernelName = "periodwise";
-/** What tells a folder of ours from anybody else's. */
+/** Identifies a specification written by this program. */
 const marker = "periodwise";
 
 /**
- * Where kernel specifications of this user lie.
+ * Folder of the user's kernel specifications.
  * @see Jupyter documentation, "Common directories and file locations": data directory.
  */
 export function dataFolder(prefix: string | undefined, env: NodeJS.ProcessEnv, platform: string): string {
@@ -30,10 +30,10 @@ interface Specification {
   readonly metadata?: Readonly<Record<string, unknown>>;
 }
 
-/** Writes the specification by which front ends find the kernel; returns its folder. */
+/** Writes the kernel specification for front ends; returns its folder. */
 export function installSpecification(data: string, command: KernelCommand): string {
   const folder = join(data, "kernels", kernelName);
-  if (existsSync(folder) && !isOurs(folder)) throw foreignSpecification(folder);
+  if (existsSync(folder) && !isOwnSpecification(folder)) throw foreignSpecificationError(folder);
   mkdirSync(folder, { recursive: true });
   const { version } = JSON.parse(readFileSync(join(installationFolder(), "package.json"), "utf8")) as {
     readonly version: string;
@@ -55,12 +55,12 @@ export function installSpecification(data: string, command: KernelCommand): stri
 export function removeSpecification(data: string): string | undefined {
   const folder = join(data, "kernels", kernelName);
   if (!existsSync(folder)) return undefined;
-  if (!isOurs(folder)) throw foreignSpecification(folder);
+  if (!isOwnSpecification(folder)) throw foreignSpecificationError(folder);
   rmSync(folder, { recursive: true });
   return folder;
 }
 
-function isOurs(folder: string): boolean {
+function isOwnSpecification(folder: string): boolean {
   try {
     const found = JSON.parse(readFileSync(join(folder, "kernel.json"), "utf8")) as Specification;
     return found.metadata?.[marker] !== undefined;

@@ -1,6 +1,6 @@
 import { Resvg } from "@resvg/resvg-js";
 
-/** Our mark: readings at equal steps that climb to a level, and the rule that runs through them. */
+/** The logo: readings at equal steps that approach a level, and the curve of a rule through them. */
 export const logoSvg: string = [
   '<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 64 64">',
   '<rect width="64" height="64" rx="12" fill="#0b5a6b"/>',
@@ -11,7 +11,7 @@ export const logoSvg: string = [
   '<circle cx="39" cy="24" r="5.5"/><circle cx="54" cy="17.5" r="5.5"/></g></svg>',
 ].join("");
 
-/** The mark as a picture of that many pixels each way. */
+/** The logo as a square PNG of the given size in pixels. */
 export function logoPng(size: number): Uint8Array {
   return new Resvg(logoSvg, { fitTo: { mode: "width", value: size } }).render().asPng();
 }

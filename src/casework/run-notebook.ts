@@ -1,24 +1,24 @@
 import { basename, dirname, join, resolve } from "node:path";
-import { type Conversation, converse } from "./client/conversation.js";
 import type { KernelCommand } from "./client/kernel-process.js";
+import { type KernelSession, startKernelSession } from "./client/kernel-session.js";
 import { answerOf } from "./notebook/answer-of.js";
 import { type Cell, type Notebook, notebookText, readNotebook } from "./notebook/notebook.js";
-import { type OutputRecord, outputRecord } from "./notebook/output-record.js";
-import { writeWhole } from "./notebook/write-whole.js";
+import { type OutputCollector, outputCollector } from "./notebook/output-collector.js";
+import { writeFileAtomic } from "./notebook/write-file-atomic.js";
 import { writePage } from "./page/write-page.js";
 import { withSettings } from "./settings.js";
 
 export interface RunOptions {
   readonly kernel: KernelCommand;
-  /** Where the executed notebook and its page go; default: `out` beside the notebook. */
+  /** Folder for the executed notebook and its page. Default: `out` beside the notebook. */
   readonly out?: string;
-  /** Values for top-level constants of the notebook, by name, as they stand on a command line. */
+  /** Values of top-level constants of the notebook by name, as written on the command line. */
   readonly set?: Readonly<Record<string, string>>;
-  /** Told before each code cell: its number among the code cells, and how many there are. */
+  /** Called before each code cell with its number among the code cells and their count. */
   readonly onCell?: (cell: number, of: number) => void;
 }
 
-/** The cell that ended a run. */
+/** The cell that failed. */
 export interface CellFailure {
   readonly cell: number;
   readonly source: string;
@@ -27,7 +27,7 @@ export interface CellFailure {
   readonly traceback: readonly string[];
 }
 
-/** What became of a notebook run without a front end. */
+/** The outcome of a notebook run without a front end. */
 export type NotebookRun =
   | {
       readonly kind: "completed";
@@ -40,27 +40,26 @@ export type NotebookRun =
   | { readonly kind: "failed"; readonly path: string; readonly failure: CellFailure };
 
 /**
- * Runs every cell of a notebook in a kernel of its own and writes the executed notebook
- * and its page. The first cell with
- * an error ends the run, and then nothing is written: what an earlier run wrote stays.
+ * Runs every cell of a notebook in a kernel of its own and writes the executed notebook and its page. The first cell
+ * with an error ends the run; then nothing is written, and the files of an earlier run are kept.
  * @throws {KernelError} `unreadable-notebook` | `unknown-setting` | `kernel-ended` | `kernel-silent`.
  */
 export async function runNotebook(path: string, options: RunOptions): Promise<NotebookRun> {
   const notebook = withSettings(readNotebook(path), options.set ?? {}, path);
-  const conversation = await converse(options.kernel, dirname(resolve(path)));
+  const session = await startKernelSession(options.kernel, dirname(resolve(path)));
   try {
-    const executed = await executeCells(notebook, conversation, options.onCell);
+    const executed = await executeCells(notebook, session, options.onCell);
     if (executed.kind === "failed") return { kind: "failed", path, failure: executed.failure };
-    const place = join(options.out ?? join(dirname(path), "out"), basename(path));
-    const page = place.replace(/(\.ipynb)?$/, ".html");
-    writeWhole(place, notebookText(executed.notebook));
-    writeWhole(
+    const executedPath = join(options.out ?? join(dirname(path), "out"), basename(path));
+    const page = executedPath.replace(/(\.ipynb)?$/, ".html");
+    writeFileAtomic(executedPath, notebookText(executed.notebook));
+    writeFileAtomic(
       page,
       writePage(executed.notebook, { title: basename(path, ".ipynb"), source: basename(path) }),
     );
-    return { kind: "completed", path, executed: place, page, answer: answerOf(executed.notebook) };
+    return { kind: "completed", path, executed: executedPath, page, answer: answerOf(executed.notebook) };
   } finally {
-    await conversation.end();
+    await session.end();
   }
 }
 
@@ -70,15 +69,15 @@ type Executed =
 
 async function executeCells(
   notebook: Notebook,
-  conversation: Conversation,
+  session: KernelSession,
   onCell: RunOptions["onCell"] = () => undefined,
 ): Promise<Executed> {
-  const record = outputRecord();
+  const record = outputCollector();
   const code = notebook.cells.filter((cell) => cell.cell_type === "code" && cell.source.trim() !== "");
   const counts = new Map<string, number>();
   for (const [index, cell] of code.entries()) {
     onCell(index + 1, code.length);
-    const content = await execute(conversation, cell, record);
+    const content = await execute(session, cell, record);
     if (content["status"] !== "ok") return { kind: "failed", failure: failureOf(cell, index + 1, content) };
     counts.set(cell.id, Number(content["execution_count"]));
   }
@@ -90,7 +89,7 @@ async function executeCells(
   return { kind: "completed", notebook: { ...notebook, cells } };
 }
 
-async function execute(conversation: Conversation, cell: Cell, record: OutputRecord): Promise<Content> {
+async function execute(session: KernelSession, cell: Cell, record: OutputCollector): Promise<Content> {
   const content = {
     code: cell.source,
     silent: false,
@@ -98,10 +97,10 @@ async function execute(conversation: Conversation, cell: Cell, record: OutputRec
     allow_stdin: false,
     stop_on_error: true,
   };
-  const reply = await conversation.request("execute_request", content, (message) => {
-    // The first message of a cell names its request.
-    if (message.header.msg_type === "execute_input") record.belongs(message.parent.msg_id ?? "", cell.id);
-    record.take(message);
+  const reply = await session.request("execute_request", content, (message) => {
+    // The first message of a cell has the id of its request.
+    if (message.header.msg_type === "execute_input") record.assign(message.parent.msg_id ?? "", cell.id);
+    record.add(message);
   });
   return reply.content;
 }

@@ -1,6 +1,6 @@
 import { type Initialiser, initialisers } from "../kernel/index.js";
+import { unknownSettingError } from "./errors.js";
 import type { Cell, Notebook } from "./notebook/notebook.js";
-import { unknownSetting } from "./refusals.js";
 
 interface Settable extends Initialiser {
   readonly cell: Cell;
@@ -8,7 +8,7 @@ interface Settable extends Initialiser {
 
 /**
  * The notebook with other values for some of its top-level constants, so that a case can be run under another
- * assumption without being edited. The changed source is what the executed notebook shows.
+ * assumption without editing it. The executed notebook shows the changed source.
  * @throws {KernelError} `unknown-setting` when no cell has such a name at its top level.
  */
 export function withSettings(
@@ -29,7 +29,7 @@ function withSetting(notebook: Notebook, name: string, value: string, path: stri
   );
   const target = settable.find((one) => one.name === name);
   if (target === undefined) {
-    throw unknownSetting(
+    throw unknownSettingError(
       name,
       path,
       settable.map((one) => one.name),
@@ -40,7 +40,7 @@ function withSetting(notebook: Notebook, name: string, value: string, path: stri
   return { ...notebook, cells: notebook.cells.map((one) => (one === cell ? { ...cell, source } : one)) };
 }
 
-/** A number, true, false, null or JSON stands as it is; anything else is a text. */
+/** A number, true, false, null or other JSON is inserted as it is; anything else as a string. */
 function asExpression(value: string): string {
   try {
     JSON.parse(value);

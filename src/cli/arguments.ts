@@ -1,15 +1,18 @@
-/** A command line, read: plain words in order, and options. */
+/** A parsed command line: words in order, and options. */
 export interface Arguments {
   readonly words: readonly string[];
   /** Options that take a value: `--out folder` or `--out=folder`; the last one counts. */
   readonly options: Readonly<Record<string, string>>;
-  /** `--set name=value`, as often as wanted. */
+  /** `--set name=value`, any number of times. */
   readonly set: Readonly<Record<string, string>>;
 }
 
 const known = ["out", "set", "prefix"];
 
-/** @throws {Error} for an option that is not known or has no value. */
+/** A mistake on the command line. */
+export class UsageError extends Error {}
+
+/** @throws {UsageError} for an unknown option or one without a value. */
 export function readArguments(given: readonly string[]): Arguments {
   const words: string[] = [];
   const options: Record<string, string> = {};
@@ -23,10 +26,10 @@ export function readArguments(given: readonly string[]): Arguments {
     const [name = "", attached] = word.slice(2).split(/=(.*)/s);
     const value = attached ?? rest.shift();
     if (!known.includes(name))
-      throw new Error(`There is no option --${name}; there are --${known.join(", --")}.`);
+      throw new UsageError(`Unknown option --${name}. Options: --${known.join(", --")}.`);
     if (value === undefined)
-      throw new Error(`The option --${name} needs a value, as in --${name} ${example[name]}.`);
-    if (name === "set") addSetting(set, value);
+      throw new UsageError(`Option --${name} needs a value, such as --${name} ${example[name]}.`);
+    if (name === "set") addAssignment(set, value);
     else options[name] = value;
   }
   return { words, options, set };
@@ -34,8 +37,8 @@ export function readArguments(given: readonly string[]): Arguments {
 
 const example: Readonly<Record<string, string>> = { out: "folder", set: "name=value", prefix: "folder" };
 
-function addSetting(set: Record<string, string>, text: string): void {
+function addAssignment(set: Record<string, string>, text: string): void {
   const at = text.indexOf("=");
-  if (at < 1) throw new Error(`--set ${text} has no value; write --set name=value.`);
+  if (at < 1) throw new UsageError(`--set ${text} has no value. Write --set name=value.`);
   set[text.slice(0, at)] = text.slice(at + 1);
 }

@@ -1,6 +1,6 @@
 import { type Rule, rules } from "../rule/index.js";
 
-/** A rule of the catalogue as a text that fits between two quotes. */
+/** A catalogue rule as text for a string of one line. */
 export interface CatalogueText {
   readonly name: string;
   readonly title: string;
@@ -10,7 +10,7 @@ export interface CatalogueText {
 
 let known: readonly CatalogueText[] | undefined;
 
-/** The catalogue's rules of one line that need nothing said beside their text; read once. */
+/** The catalogue rules of one line that need no options; read once. */
 export function catalogueTexts(): readonly CatalogueText[] {
   known ??= Object.entries(rules).flatMap(([name, make]) => {
     const rule = withoutArguments(make as () => Rule);
@@ -20,7 +20,7 @@ export function catalogueTexts(): readonly CatalogueText[] {
   return known;
 }
 
-/** Rules for a given delay or number of stages cannot be made without it. */
+/** The rule; undefined when it needs a lag or a number of stages. */
 function withoutArguments(make: () => Rule): Rule | undefined {
   try {
     return make();

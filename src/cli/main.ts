@@ -1,21 +1,32 @@
 #!/usr/bin/env node
-import { readArguments } from "./arguments.js";
+import { readFileSync } from "node:fs";
+import { join } from "node:path";
+import { installationFolder } from "../kernel/index.js";
+import { readArguments, UsageError } from "./arguments.js";
 import { commands, usage } from "./commands.js";
 
-/** Reads the command line, runs the command, and says in words what went wrong when something did. */
+const misuse = 2;
+
+/** Reads the command line and runs the command. Exit status: 0, 1 for a failure, 2 for a mistake on the command line. */
 async function main(): Promise<void> {
   const [name = "help", ...rest] = process.argv.slice(2);
+  if (["help", "--help", "-h"].includes(name)) return console.log(usage);
+  if (["version", "--version", "-v"].includes(name)) return console.log(version());
   const command = Object.hasOwn(commands, name) ? commands[name] : undefined;
   if (command === undefined) {
-    const known = name === "help" || name === "--help";
-    (known ? console.log : console.error)(known ? usage : `There is no command "${name}".\n\n${usage}`);
-    process.exitCode = known ? 0 : 2;
-    return;
+    const { didYouMean, nearestNames } = await import("../numeric/index.js");
+    const hint = didYouMean(nearestNames(name, Object.keys(commands)));
+    throw new UsageError(`Unknown command "${name}".${hint}\n\n${usage}`);
   }
   process.exitCode = await command(readArguments(rest));
 }
 
+function version(): string {
+  const text = readFileSync(join(installationFolder(), "package.json"), "utf8");
+  return (JSON.parse(text) as { readonly version: string }).version;
+}
+
 main().catch((cause: unknown) => {
   console.error(cause instanceof Error ? cause.message : String(cause));
-  process.exitCode = 1;
+  process.exitCode = cause instanceof UsageError ? misuse : 1;
 });

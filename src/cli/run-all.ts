@@ -1,7 +1,7 @@
 import { basename } from "node:path";
 import { type NotebookRun, type RunOptions, runNotebook } from "../casework/index.js";
 
-/** Runs notebooks one after the other, a line of outcome each. @returns the exit status: 1 when one failed. */
+/** Runs notebooks one after the other and prints one line for each. @returns the exit status: 1 when one failed. */
 export async function runAll(paths: readonly string[], options: RunOptions): Promise<number> {
   let status = 0;
   for (const [index, path] of paths.entries()) {
@@ -35,20 +35,20 @@ async function attempt(path: string, options: RunOptions): Promise<Attempt> {
 }
 
 function completedLine({ path, answer, page }: Extract<NotebookRun, { kind: "completed" }>): string {
-  return `${basename(path)}: ${answer ?? "ran to its end; it gives no answer"} [${page}]`;
+  return `${basename(path)}: ${answer ?? "completed, without an answer"} [${page}]`;
 }
 
 function failureText({ path, failure }: Extract<NotebookRun, { kind: "failed" }>): string {
   const { cell, traceback, ename, evalue } = failure;
-  const told = process.stderr.isTTY ? traceback : traceback.map(plain);
+  const shown = process.stderr.isTTY ? traceback : traceback.map(plain);
   return [
-    `${basename(path)}: stopped at code cell ${cell} with ${ename}: ${evalue}`,
-    ...told.slice(1),
-    "Nothing was written. Correct that cell and run it again; in a front end, run the cells up to it to look around.",
+    `${basename(path)}: code cell ${cell} failed with ${ename}: ${evalue}`,
+    ...shown.slice(1),
+    "Nothing was written. Correct the cell and run the notebook again; to inspect its values, run it up to that cell in a front end.",
   ].join("\n");
 }
 
-/** Text without the escape sequences that colour it on a terminal. */
+/** Text without terminal colours. */
 function plain(text: string): string {
   return text.split("\u001b").reduce((done, part) => done + part.replace(/^\[[0-9;]*m/, ""));
 }

@@ -1,6 +1,6 @@
 /**
- * Makes a checkout ready to run: installs the locked packages when they are missing or out of date, then
- * builds what is stale. Uses nothing but Node itself, so that it works before anything is installed.
+ * Prepares a checkout: installs the locked packages when they are missing or out of date, then builds what is stale.
+ * Uses only Node itself, so that it works before anything is installed.
  */
 import { spawnSync } from "node:child_process";
 import { createHash } from "node:crypto";

@@ -1,4 +1,4 @@
-/** The word around a position: its span, and what of it lies before the position. */
+/** The word around a position: its span, and the part before the position. */
 export interface Word {
   readonly text: string;
   readonly before: string;

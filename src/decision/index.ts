@@ -5,7 +5,7 @@ export {
   type SensitivityRow,
   sensitivity,
 } from "./choice/sensitivity.js";
-export type { Solution, Solved, SolveOptions, Target } from "./choice/solution.js";
+export type { DatedTarget, Solution, Solved, SolveOptions, Target } from "./choice/solution.js";
 export { solveFor } from "./choice/solve-for.js";
 export { type Tradeoff, type TradeoffOptions, tradeoff } from "./choice/tradeoff.js";
 export type { Measure } from "./measure/measure.js";

@@ -1,4 +1,5 @@
 import { ModelError, nearestNames } from "../numeric/index.js";
+import { type CrossedLevel, crossedLevel, levelSide } from "../projection/index.js";
 
 export function refuseStateUnknown(state: string, states: readonly string[]): ModelError {
   return new ModelError(
@@ -34,11 +35,13 @@ export function refuseFewUnits(count: number): ModelError {
   );
 }
 
-export function refuseNotWatched(state: string, value: number, direction: string): ModelError {
+export function refuseNotWatched(state: string, level: CrossedLevel): ModelError {
+  const { value, sign } = levelSide(level);
+  const side = sign < 0 ? "fallsTo" : "risesTo";
   return new ModelError(
     "paths-not-kept",
-    `The paths were too many to keep, and ${state} at ${value} was not watched. Run it again with watch: [{ state: "${state}", value: ${value}, direction: "${direction}" }].`,
-    { state, value, direction },
+    `The paths were too many to keep, and ${state} at ${value} was not watched. Run it again with watch: [{ state: "${state}", ${side}: ${value} }].`,
+    { state, ...crossedLevel(level) },
   );
 }
 
@@ -84,7 +87,7 @@ export function refuseMeasureWindow(from: number, to: number, ahead: number): Mo
 export function refuseNoChance(state: string): ModelError {
   return new ModelError(
     "nothing-random",
-    `The risk of ${state} needs a rule with random change. Give it: noise: { ${state}: { distribution: "normal", sd: 1 } }, or ask for a time instead.`,
+    `The probability that ${state} gets to a level needs a rule with random change. Give it: noise: { ${state}: { distribution: "normal", sd: 1 } }, or ask for a time instead.`,
     { state },
   );
 }
@@ -124,16 +127,16 @@ export function refuseNoTarget(aim: number | undefined): ModelError {
   );
 }
 
-export function refuseRiskTarget(aim: number): ModelError {
+export function refuseProbabilityTarget(aim: number): ModelError {
   const hint = aim > 1 && aim <= 100 ? `: write ${aim / 100} for ${aim}%` : `; ${aim} was given`;
-  return new ModelError("risk-outside", `A risk is from 0 to 1${hint}.`, { aim });
+  return new ModelError("probability-outside", `A probability is from 0 to 1${hint}.`, { aim });
 }
 
 /** @param past - what is past, as a clause. */
 export function refusePastAlready(past: string): ModelError {
   return new ModelError(
     "past-already",
-    `No setting changes when it gets there: ${past}. Ask for another { value }, or the other { direction }.`,
+    `No setting changes when it gets there: ${past}. Ask for another level, or for the other of \`risesTo\` and \`fallsTo\`.`,
     { past },
   );
 }
@@ -145,10 +148,10 @@ export function refuseNoObjective(): ModelError {
   );
 }
 
-export function refuseRiskObjective(): ModelError {
+export function refuseProbabilityObjective(): ModelError {
   return new ModelError(
-    "risk-not-smooth",
-    "A risk moves in the steps of its draws, so it has neither a slope nor a sharp optimum. Use tradeoff to see it against the setting, or solveFor with { atMost }.",
+    "probability-not-smooth",
+    "A probability moves in the steps of its paths, so it has neither a slope nor a sharp optimum. Use tradeoff to see it against the setting, or solveFor with { atMost }.",
   );
 }
 
@@ -166,10 +169,18 @@ export function refuseNoPurpose(): ModelError {
   );
 }
 
-export function refuseNoCandidate(from: number, to: number): ModelError {
+export function refuseNoCandidate(from: string, to: string): ModelError {
   return new ModelError(
     "no-candidate",
     `No reading can be taken at the times asked for; the rules know times from ${from} to ${to}, and with errors in the process only those after the record.`,
     { from, to },
+  );
+}
+
+export function refusePeriod(period: string, first: string, second: string): ModelError {
+  return new ModelError(
+    "unknown-period",
+    `"${period}" names no single period of the projection; its periods are ${first}, ${second} and so on.`,
+    { period },
   );
 }

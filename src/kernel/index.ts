@@ -2,7 +2,7 @@ export { type Initialiser, initialisers } from "./cells/initialisers.js";
 export { installationFolder } from "./cells/installation.js";
 export { warmUp } from "./cells/warm-up.js";
 export { KernelError } from "./kernel-error.js";
-export type { StringComplaint, StringCompletion, StringLanguage } from "./language/string-language.js";
+export type { StringCompletion, StringDiagnostic, StringLanguage } from "./language/string-language.js";
 export type { MimeBundle } from "./mime-bundle.js";
 export { address, type Connection } from "./protocol/connection.js";
 export { headersOf, type Message } from "./protocol/message.js";

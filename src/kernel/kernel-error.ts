@@ -1,6 +1,6 @@
 /**
- * Something the kernel or its client cannot do as asked: a broken connection file, a kernel that does not
- * start, a notebook that is not one. `code` is kebab-case and stable; `facts` holds what the message mentions.
+ * An error of the kernel or its client: a broken connection file, a kernel that does not start, an invalid notebook.
+ * `code` is kebab-case and stable; `facts` has the values that the message mentions.
  */
 export class KernelError extends Error {
   override readonly name = "KernelError";

@@ -1,5 +1,5 @@
-/** What is shown of a value: one representation a MIME type, `text/plain` always among them. */
+/** Representations of a value by MIME type; `text/plain` is always present. */
 export type MimeBundle = Readonly<Record<string, string | object>>;
 
-/** A value that shows itself has a method of this name: `[showsItself](): MimeBundle | Promise<MimeBundle>`. */
-export const showsItself: unique symbol = Symbol.for("mime-bundle") as never;
+/** A value that displays itself has a method of this name: `[showsItself](): MimeBundle | Promise<MimeBundle>`. */
+export const mimeBundleMethod: unique symbol = Symbol.for("mime-bundle") as never;

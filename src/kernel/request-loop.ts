@@ -3,16 +3,16 @@ import type { Message } from "./protocol/message.js";
 import { execute } from "./requests/execute.js";
 import { type Handler, handlers } from "./requests/handlers.js";
 import type { KernelState } from "./requests/kernel-state.js";
-import type { FromTransport, Outlet } from "./transport/port-messages.js";
+import type { FromTransport, OutgoingChannel } from "./transport/port-messages.js";
 
-export type ReplyTo = (outlet: Outlet, request: Message, type: string, content: object) => void;
+export type ReplyTo = (outlet: OutgoingChannel, request: Message, type: string, content: object) => void;
 
 interface Queued {
-  readonly outlet: Outlet;
+  readonly outlet: OutgoingChannel;
   readonly request: Message;
 }
 
-/** Takes what the transport thread hands over. Cells run one after the other; other requests do not wait. */
+/** Handles the messages of the transport thread. Cells run one after the other; other requests do not wait. */
 export function requestLoop(kernel: KernelState, reply: ReplyTo): (message: FromTransport) => void {
   const queue: Queued[] = [];
   let busy = false;
@@ -22,11 +22,11 @@ export function requestLoop(kernel: KernelState, reply: ReplyTo): (message: From
     busy = true;
     for (let next = queue.shift(); next !== undefined; next = queue.shift()) {
       const { outlet, request } = next;
-      const given = await bracketed(kernel, request, async () => {
+      const given = await withBusyStatus(kernel, request, async () => {
         const content = await execute(kernel, request);
         const stops =
           Reflect.get(content, "status") === "error" && request.content["stop_on_error"] !== false;
-        // What has arrived by now was queued behind the failed cell; what comes after the reply was not.
+        // Requests that have arrived by now were queued behind the failed cell; later ones were not.
         if (stops) await new Promise(setImmediate);
         const aborted = stops ? queue.splice(0) : [];
         reply(outlet, request, "execute_reply", content);
@@ -39,7 +39,7 @@ export function requestLoop(kernel: KernelState, reply: ReplyTo): (message: From
 
   const abort = async (given: readonly Queued[]): Promise<void> => {
     for (const { outlet, request } of given) {
-      await bracketed(kernel, request, async () => {
+      await withBusyStatus(kernel, request, async () => {
         reply(outlet, request, "execute_reply", { status: "aborted", execution_count: kernel.count });
       });
     }
@@ -47,7 +47,7 @@ export function requestLoop(kernel: KernelState, reply: ReplyTo): (message: From
 
   return (message) => {
     if (message.kind === "shutdown") process.exit(0);
-    if (message.kind === "interrupt") kernel.interrupts.heard(message.count);
+    if (message.kind === "interrupt") kernel.interrupts.received(message.count);
     if (message.kind === "input") kernel.questions.answer(message.message);
     if (message.kind !== "request") return;
     const { outlet, message: request } = message;
@@ -59,7 +59,7 @@ export function requestLoop(kernel: KernelState, reply: ReplyTo): (message: From
 }
 
 /** Publishes busy before and idle after, whatever happens between. @see Jupyter messaging, "Kernel status". */
-async function bracketed<T>(kernel: KernelState, request: Message, work: () => Promise<T>): Promise<T> {
+async function withBusyStatus<T>(kernel: KernelState, request: Message, work: () => Promise<T>): Promise<T> {
   kernel.publish(request.header, "status", { execution_state: "busy" });
   try {
     return await work();
@@ -68,11 +68,16 @@ async function bracketed<T>(kernel: KernelState, request: Message, work: () => P
   }
 }
 
-/** An unknown request gets its busy and idle, and no reply; one that fails is told so. */
-async function handle(kernel: KernelState, reply: ReplyTo, outlet: Outlet, request: Message): Promise<void> {
+/** An unknown request gets busy and idle and no reply; one that fails gets an error reply. */
+async function handle(
+  kernel: KernelState,
+  reply: ReplyTo,
+  outlet: OutgoingChannel,
+  request: Message,
+): Promise<void> {
   const type = request.header.msg_type;
   const handler = Object.hasOwn(handlers, type) ? handlers[type] : undefined;
-  await bracketed(kernel, request, async () => {
+  await withBusyStatus(kernel, request, async () => {
     const content = await answer(handler, kernel, request);
     if (content !== undefined) reply(outlet, request, type.replace(/_request$/, "_reply"), content);
   });

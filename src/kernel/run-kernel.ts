@@ -1,8 +1,8 @@
 import { randomUUID } from "node:crypto";
-import { type CellSession, cellSession, followName, stretchesName } from "./cells/cell-session.js";
+import { type CellSession, cellSession, runBetweenAwaitsName, trackName } from "./cells/cell-session.js";
 import { interrupts } from "./cells/interrupts.js";
-import { runInStretches } from "./cells/run-in-stretches.js";
-import { sourceRegister } from "./cells/source-register.js";
+import { runBetweenAwaits } from "./cells/run-between-awaits.js";
+import { sourceRegistry } from "./cells/source-registry.js";
 import type { StringLanguage } from "./language/string-language.js";
 import { captureStreams } from "./output/capture-streams.js";
 import { clearOutput, display } from "./output/display.js";
@@ -13,23 +13,23 @@ import { requestLoop } from "./request-loop.js";
 import { inputQuestions } from "./requests/input-questions.js";
 import { kernelInfo } from "./requests/kernel-info.js";
 import type { KernelState } from "./requests/kernel-state.js";
-import { surviveStrayErrors } from "./stray-errors.js";
-import { newPause } from "./transport/pause.js";
-import type { Outlet } from "./transport/port-messages.js";
+import { newInterruptFlag } from "./transport/interrupt-flag.js";
+import type { OutgoingChannel } from "./transport/port-messages.js";
 import { startTransport } from "./transport/start-transport.js";
+import { reportUncaughtErrors } from "./uncaught-errors.js";
 
-/** When the first cells have run, what was compiled for them is worth keeping for the next start. */
+/** By then the first cells have run, and the compiler cache is worth saving for the next start. */
 const keepAfterMs = 6_000;
-/** Loaded sooner by the first cell that has a string. */
+/** Loaded earlier by the first cell that has a string. */
 const languagesAfterMs = 1_000;
 
-/** By this name a package used in cells finds `display`. */
+/** Symbol under which packages used in cells find `display`. */
 const displayName: unique symbol = Symbol.for("periodwise.display") as never;
 
 /**
- * Runs a kernel in this process until a front end shuts it down. Cells run in the present folder.
+ * Runs a kernel in this process until a front end shuts it down. Cells run in the current folder.
  *
- * @param languages - gives the services for languages inside strings of a cell, once the kernel has time.
+ * @param languages - loads the services for languages inside strings of a cell; called when the kernel is idle.
  * @throws {KernelError} `unreadable-connection-file` | `incomplete-connection-file`.
  */
 export function runKernel(
@@ -38,12 +38,12 @@ export function runKernel(
 ): void {
   const connection = readConnection(connectionFile);
   const session = randomUUID();
-  const pause = newPause();
-  const transport = startTransport({ connection, session, kernelInfo: kernelInfo(), pause });
+  const pause = newInterruptFlag();
+  const transport = startTransport({ connection, session, kernelInfo: kernelInfo(), interruptFlag: pause });
   const newHeader = headersOf("kernel", session);
 
   const send = (
-    outlet: Outlet,
+    outlet: OutgoingChannel,
     message: Omit<Message, "header" | "metadata" | "buffers">,
     type: string,
   ): void => {
@@ -52,10 +52,10 @@ export function runKernel(
   };
   const publish: KernelState["publish"] = (parent, type, content) =>
     send("iopub", { identities: [Buffer.from(type)], parent, content: { ...content } }, type);
-  const reply = (outlet: Outlet, request: Message, type: string, content: object): void =>
+  const reply = (outlet: OutgoingChannel, request: Message, type: string, content: object): void =>
     send(outlet, { identities: request.identities, parent: request.header, content: { ...content } }, type);
 
-  const sources = sourceRegister();
+  const sources = sourceRegistry();
   let cells: CellSession | undefined;
   let services: Promise<readonly StringLanguage[]> | undefined;
   const kernel: KernelState = {
@@ -75,29 +75,29 @@ export function runKernel(
     count: 0,
     serial: 0,
   };
-  offerGlobals(kernel);
+  defineGlobals(kernel);
   captureStreams();
-  surviveStrayErrors(kernel);
+  reportUncaughtErrors(kernel);
   transport.receive(requestLoop(kernel, reply));
-  // The transport thread answers the first requests meanwhile.
+  // Meanwhile the transport thread answers the first requests.
   setImmediate(() => kernel.session());
   setTimeout(() => void kernel.languages(), languagesAfterMs);
-  setTimeout(() => kernel.session().compiler.keep(), keepAfterMs);
+  setTimeout(() => kernel.session().compiler.saveCache(), keepAfterMs);
 }
 
-/** Puts what cells may name without an import on the global object, out of sight of enumeration. */
-function offerGlobals(kernel: KernelState): void {
-  const offered: Record<string | symbol, unknown> = {
+/** Defines what cells can use without an import as non-enumerable globals. */
+function defineGlobals(kernel: KernelState): void {
+  const globals: Record<string | symbol, unknown> = {
     display,
     clearOutput,
     input: kernel.questions.ask,
     [displayName]: display,
-    [followName]: kernel.interrupts.follow,
-    [stretchesName]: runInStretches,
+    [trackName]: kernel.interrupts.track,
+    [runBetweenAwaitsName]: runBetweenAwaits,
   };
-  for (const name of Reflect.ownKeys(offered)) {
+  for (const name of Reflect.ownKeys(globals)) {
     Object.defineProperty(globalThis, name, {
-      value: offered[name as string],
+      value: globals[name as string],
       configurable: true,
       writable: true,
     });

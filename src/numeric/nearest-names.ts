@@ -17,6 +17,10 @@ export function editDistance(a: string, b: string): number {
   return last[b.length]!;
 }
 
+/** " Did you mean "a" or "b"?" behind an error about a name; "" where no known name is near. */
+export const didYouMean = (nearest: readonly string[]): string =>
+  nearest.length === 0 ? "" : ` Did you mean "${nearest.join('" or "')}"?`;
+
 /** Known names close enough to a mistyped one, nearest first; names that differ only in case come first. */
 export function nearestNames(name: string, known: readonly string[]): readonly string[] {
   const reach = name.length <= 3 ? 1 : name.length <= 6 ? 2 : 3;

@@ -1,6 +1,7 @@
-import type { Fit, GroupFit } from "../estimate/index.js";
+import { type Fit, type GroupFit, problemOf } from "../estimate/index.js";
 import type { RandomStream } from "../numeric/index.js";
-import { readsPeriod } from "../rule/index.js";
+import { indexOf, labelAt, labelsAt, periodWords } from "../record/index.js";
+import { dependsOnPeriod } from "../rule/index.js";
 import { type CentralPath, centralPath, stateLimits } from "./central-path.js";
 import { keepLimit } from "./check-run.js";
 import { blockStreams } from "./ensemble/block-streams.js";
@@ -11,13 +12,11 @@ import { type FitGround, fitGround } from "./fit-ground.js";
 import type { ForecastOptions, ForecastSettings } from "./forecast-options.js";
 import { forecastWarnings } from "./forecast-warnings.js";
 import type { Scenario } from "./inputs/scenarios.js";
-import { fittedNoise } from "./noise/fitted-noise.js";
 import { noiseDraw } from "./noise/noise.js";
 import { type DrawnStarts, drawnStarts, type UnknownsDraw, unknownsDraw } from "./parameters/drawn-starts.js";
-import { periodLabels } from "./period-labels.js";
 import { type Predictability, predictabilityOf } from "./predictability.js";
 import type { GroupForecast } from "./projected-group.js";
-import { refuseNoPath } from "./refusals.js";
+import { refuseFilteredStart, refuseFrom, refuseNoPath } from "./refusals.js";
 
 type Settled = ForecastOptions & ForecastSettings;
 
@@ -29,10 +28,24 @@ export function forecastGroup(
   options: Settled,
   stream: RandomStream,
 ): readonly GroupForecast[] {
-  const grounds = scenarios.map(({ plans }) => fitGround(fit, group, options.periods, plans));
+  const after = startsAfter(fit, group, options.from);
+  const grounds = scenarios.map(({ plans }) => fitGround(fit, group, options.periods, plans, after));
   const source = unknownsDraw(fit, group);
   const seeds = blockStreams(stream, options.paths);
   return grounds.map((ground, i) => projected(fit, ground, scenarios[i]!, options, source, seeds));
+}
+
+/** The index of the period to start after; undefined for the last recorded one. */
+function startsAfter(fit: Fit, { group }: GroupFit, asked: ForecastOptions["from"]): number | undefined {
+  const from = typeof asked === "object" ? asked.byGroup[group] : asked;
+  if (from === undefined) return undefined;
+  const { axis, index } = fit.observations.groups.find(({ name }) => name === group)!;
+  const last = index[index.length - 1]!;
+  const found = indexOf(axis, from);
+  if (found === undefined || found < 0 || found > last)
+    throw refuseFrom(from, labelAt(axis, 0), labelAt(axis, last));
+  if (problemOf(fit).kind === "state-space" && found < last) throw refuseFilteredStart(from);
+  return found;
 }
 
 function projected(
@@ -59,16 +72,16 @@ function projected(
   const predictability = predicted(ground, starts, means[0]!.standardDeviation[ahead]!);
   const shown = withHorizon(central, predictability, recordEnd - from);
   const index = Array.from({ length: periods + 1 }, (_, t) => from + t);
-  const step = observations.period.step.every;
-  const labels = periodLabels(observations, ground.recorded, index);
-  const time = index.map((t) => ground.recorded.time[0]! + t * step);
+  const { axis, time: recordedTime } = ground.recorded;
+  const time = index.map((t) => recordedTime[0]! + t * axis.step.every);
   return {
     group: group.group,
     scenario: scenario.name,
     plans: scenario.plans,
+    axis,
     index,
     time,
-    ...(labels && { labels }),
+    ...(axis.counts !== "numbers" && { labels: labelsAt(axis, index) }),
     recordEnd,
     states: rule.states.map((state, s) => ({
       state,
@@ -84,7 +97,7 @@ function projected(
       future: futures.flatMap((state) => state.paths ?? []),
       discarded: starts.discarded,
     },
-    passages: passagesOf(placedWatches(rule, options.watch), passagesFor(fit, mean, future)),
+    passages: passagesOf(placedWatches(rule, options.watch), passagesFor(fit, group, mean, future)),
     left,
     leftError: Math.sqrt((left * (1 - left)) / options.paths),
     ...(predictability && { predictability }),
@@ -93,7 +106,7 @@ function projected(
       starts,
       central: { ...central, values: shown },
       scenario: scenario.name,
-      period: (row) => labels?.[row] ?? `${observations.period.unit} ${Number(time[row]!.toPrecision(6))}`,
+      period: (row) => periodWords(axis, from + row),
       left,
       predictability,
       ground,
@@ -136,7 +149,7 @@ function runBoth(
     limits: stateLimits(rule),
     streams,
   };
-  const { change, reading } = fittedNoise(fit, ground.group);
+  const { change, reading } = problemOf(fit).group(ground.group.group).noise;
   runEnsemble({ ...run, change: none, reading: none, onRow: mean.onRow, onProgress: half(0) });
   runEnsemble({
     ...run,
@@ -149,14 +162,15 @@ function runBoth(
   return { mean, future };
 }
 
-/** An answer about the process is read from the process: with reading errors, from the paths without them. */
-function passagesFor(fit: Fit, mean: Gatherer, future: Gatherer): readonly Float64Array[] {
-  return fit.options.errors === "observation" ? mean.passages : future.passages;
+/** An answer about the process is read from the process: with reading errors alone, from the paths without them. */
+function passagesFor(fit: Fit, { group }: GroupFit, mean: Gatherer, future: Gatherer): Gatherer["passages"] {
+  const { change } = problemOf(fit).group(group).noise;
+  return change.every((noise) => noise === undefined) ? mean.passages : future.passages;
 }
 
 function predicted(ground: FitGround, starts: DrawnStarts, firstError: number): Predictability | undefined {
   const { rule, compiled, parameters, initial } = ground;
-  if (rule.inputs.length > 0 || readsPeriod(rule)) return undefined;
+  if (rule.inputs.length > 0 || dependsOnPeriod(rule)) return undefined;
   const own = { paths: 1, size: parameters.length, parameters, initial };
   return predictabilityOf(compiled, initial.length, own, starts, firstError);
 }

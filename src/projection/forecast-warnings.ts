@@ -28,14 +28,26 @@ const worthTelling = 0.05;
 
 /** What a reader of a forecast must know. */
 export function forecastWarnings(source: WarningSource): Warning[] {
-  const { central, left, starts, ground } = source;
+  const { central, left, starts } = source;
   return [
+    ...startedEarlier(source),
     ...openParameters(source),
     ...discardedDraws(starts),
-    ...rangeWarnings(central, ground.from, left, starts.paths),
+    ...rangeWarnings(central, source.period, left, starts.paths),
     ...recordedSignWarnings(source),
     ...beyondRecord(source),
     ...partingPaths(source.predictability),
+  ];
+}
+
+function startedEarlier({ ground, period }: WarningSource): Warning[] {
+  const { recorded, recordEnd, from } = ground;
+  if (recordEnd === recorded.index[recorded.index.length - 1]) return [];
+  return [
+    {
+      code: "starts-inside-record",
+      message: `The forecast starts after ${period(recordEnd - from)}; its parameters were estimated from the whole record, later rows included.`,
+    },
   ];
 }
 

@@ -3,14 +3,19 @@ export type { Band } from "./ensemble/band.js";
 export { blockStreams } from "./ensemble/block-streams.js";
 export { type EnsembleRun, runEnsemble, type Starts } from "./ensemble/ensemble.js";
 export type { Growth } from "./ensemble/growth.js";
-export { type Direction, type Passage, passageLog, type Watch } from "./ensemble/passage.js";
+export {
+  type CrossedLevel,
+  crossedLevel,
+  type LevelSide,
+  levelSide,
+  type Passage,
+  passageLog,
+  type Watch,
+} from "./ensemble/passage.js";
 export { type FitGround, fitGround } from "./fit-ground.js";
 export { type Forecast, forecast } from "./forecast.js";
 export type { ForecastOptions } from "./forecast-options.js";
-export type { InputPlan, InputPlans } from "./inputs/input-plan.js";
-export { plannedInputs } from "./inputs/planned-inputs.js";
 export type { Scenarios } from "./inputs/scenarios.js";
-export { fittedNoise } from "./noise/fitted-noise.js";
 export { type Noise, type NoiseDraw, noiseDraw } from "./noise/noise.js";
 export { ruleNoise } from "./noise/rule-noise.js";
 export { type DrawnStarts, drawnStarts, unknownsDraw } from "./parameters/drawn-starts.js";

@@ -1,8 +1,9 @@
+import type { InputPlans } from "../dynamics/index.js";
 import type { Warning } from "../numeric/index.js";
+import type { PeriodAxis } from "../record/index.js";
 import type { Band } from "./ensemble/band.js";
 import type { Growth } from "./ensemble/growth.js";
 import type { Passage } from "./ensemble/passage.js";
-import type { InputPlans } from "./inputs/input-plan.js";
 import type { PathDraws } from "./path-draws.js";
 import type { Predictability } from "./predictability.js";
 
@@ -27,11 +28,13 @@ export interface GroupForecast {
   readonly scenario: string;
   /** The plans of inputs that it stands on. */
   readonly plans: InputPlans;
-  /** Step indexes: from period 0 for a trajectory fit, from the last recorded one for a one-step fit. */
+  /** The axis of its periods: `labelAt(axis, index)` names one. */
+  readonly axis: PeriodAxis;
+  /** Indexes on the axis: from period 0 for a trajectory fit, from the last recorded one for a one-step fit. */
   readonly index: readonly number[];
   /** The period column's values there. */
   readonly time: readonly number[];
-  /** The dates there, where the record's periods are dates. */
+  /** The labels there, where periods are not mere numbers. */
   readonly labels?: readonly string[];
   /** Step index of the last recorded value; of the first value in a simulation. */
   readonly recordEnd: number;

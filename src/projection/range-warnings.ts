@@ -4,15 +4,20 @@ import type { CentralPath } from "./central-path.js";
 /**
  * What a reader must know where paths leave the range of a state.
  *
- * @param first - number of the first row's period.
+ * @param period - a row's period in words.
  */
-export function rangeWarnings(central: CentralPath, first: number, left: number, paths: number): Warning[] {
+export function rangeWarnings(
+  central: CentralPath,
+  period: (row: number) => string,
+  left: number,
+  paths: number,
+): Warning[] {
   const found: Warning[] = [];
   const { stop } = central;
   if (stop !== undefined)
     found.push({
       code: "path-leaves-range",
-      message: `Period ${first + stop.row}: the rule gives ${stop.state} = ${Number(stop.value.toPrecision(4))}; the path without random change stops at period ${first + stop.row - 1}.`,
+      message: `At ${period(stop.row)} the rule gives ${stop.state} = ${Number(stop.value.toPrecision(4))}; the path without random change stops at ${period(Math.max(0, stop.row - 1))}.`,
     });
   if (left > 0 && paths > 1) {
     const error = Math.sqrt((left * (1 - left)) / paths);

@@ -3,7 +3,7 @@
  *
  * `inputs` holds one column an input, indexed by absolute period; `from` is the absolute period of the
  * initial state, so `t` in the rule's text is `from` in the first step. A value that leaves the finite range is
- * written as it comes (NaN or infinite) and the rest of the path follows from it: callers look.
+ * written as it is (NaN or infinite), and so is the rest of the path: callers check.
  */
 export interface CompiledRule {
   /** One period. Reads state [states], parameters [parameters]; writes next [states] (may be the same array). */
@@ -38,15 +38,15 @@ export interface CompiledRule {
     sensitivities: Float64Array,
   ) => void;
   /**
-   * One period for the paths first..last-1 of many, in place: they do not wait for each other, so this is several
-   * times faster a path than `step`. present [paths, states]; parameters [parameters], shared by all.
+   * One period for the paths first..last-1 of many, in place: steps of different paths overlap, so this is several times
+   * faster per path than `step`. present [paths, states]; parameters [parameters], shared by all.
    */
   readonly advance: Advance;
   /** The same with parameters of its own for every path: parameters [paths, parameters]. */
   readonly advanceEach: Advance;
   /**
-   * Gives the function that gathers a least-squares fit of the whole path, of its logarithms where asked;
-   * undefined where code is not generated or the unknowns are too many for it.
+   * Gives the function that computes the sums of a least-squares fit of the whole path, or of its logarithms;
+   * undefined where code is not generated or there are too many unknowns.
    */
   readonly pathSums: ((logarithmic: boolean) => PathSums) | undefined;
   /** The same for single steps from recorded states. */
@@ -54,8 +54,9 @@ export interface CompiledRule {
 }
 
 /**
- * Moves paths first..last-1 one period on from t, in place. limits [states, 2]: a path of which a state comes to lie
- * below the first or above the second, or is not finite, ends: it is NaN from there on. Limits -Number.MAX_VALUE and Number.MAX_VALUE hold everything finite.
+ * Moves paths first..last-1 one period on from t, in place. limits [states, 2]: a path of which a state falls
+ * below the first, rises above the second, or is not finite, ends: it is NaN from there on. The limits
+ * -Number.MAX_VALUE and Number.MAX_VALUE admit every finite value.
  */
 export type Advance = (
   present: Float64Array,

@@ -1,29 +1,29 @@
 import type { Algebra } from "./graph/evaluate-over.js";
-import { everywhere, type Interval, minus, plus, times } from "./graph/interval.js";
+import { type Interval, minus, plus, times, wholeLine } from "./graph/interval.js";
 import type { Operator } from "./graph/node.js";
 import type { Rule } from "./rule.js";
-import { intervalAlgebra, type PlaceOver, stepOver } from "./step-over.js";
+import { intervalAlgebra, type StepArgumentsOver, stepOver } from "./step-over.js";
 
-/** Bounds on one step and its slope over a whole interval of the present value. */
+/** Enclosure of one step and its slope over an interval of the present value. */
 export interface StepEnclosure {
   readonly value: Interval;
   readonly slope: Interval;
 }
 
-/** Parameters and inputs by slot, inputs held at one value. */
-export interface HeldValues {
+/** Parameters and inputs by slot; each input has one constant value. */
+export interface FixedValues {
   readonly parameters: Float64Array;
   readonly inputs: Float64Array;
 }
 
 const exactly = (value: number): Interval => [value, value];
 
-/** Operations at which a value may jump, and whether an interval of results shows that it does there. */
-const jumping: readonly Operator[] = ["floor", "ceil", "round", "sign", "mod", "choose"];
+/** Operations with discontinuities. */
+const jumpOperators: readonly Operator[] = ["floor", "ceil", "round", "sign", "mod", "choose"];
 
-/** Intervals that note when a jump may lie inside: there no slope bounds the change of the value. */
-function jumpNotingAlgebra(note: () => void): Algebra<Interval> {
-  const noted = (operator: Operator): Algebra<Interval>["operations"][Operator] => {
+/** Interval arithmetic that reports when a discontinuity may lie inside: there the slope is unbounded. */
+function jumpDetectingAlgebra(note: () => void): Algebra<Interval> {
+  const withDetection = (operator: Operator): Algebra<Interval>["operations"][Operator] => {
     const plain = intervalAlgebra.operations[operator];
     const whole = operator === "floor" || operator === "ceil" || operator === "sign";
     return (a, b, c) => {
@@ -34,30 +34,30 @@ function jumpNotingAlgebra(note: () => void): Algebra<Interval> {
     };
   };
   const operations = { ...intervalAlgebra.operations };
-  for (const operator of jumping) operations[operator] = noted(operator);
+  for (const operator of jumpOperators) operations[operator] = withDetection(operator);
   return { ...intervalAlgebra, operations };
 }
 
-const meet = (a: Interval, b: Interval): Interval => [Math.max(a[0], b[0]), Math.min(a[1], b[1])];
+const intersection = (a: Interval, b: Interval): Interval => [Math.max(a[0], b[0]), Math.min(a[1], b[1])];
 
 /**
- * For a rule of one state: a function that encloses the next value and its slope over an interval, past values
- * being the same as the present one. Every value that the step takes on the interval lies within `value`, and
- * every slope within `slope`, which is without bounds where the value may jump. The value is bounded both directly
- * and from the middle by the slope, which is closer on short intervals.
+ * For a rule of one state: a function that encloses the next value and its slope over an interval, lagged values
+ * being equal to the present one. Every value of the step on the interval lies within `value`, and every slope within
+ * `slope`, which is unbounded where the value may jump. The value is enclosed both directly and by the mean value
+ * form, which is tighter on short intervals.
  */
-export function encloseStep(rule: Rule, held: HeldValues): (present: Interval) => StepEnclosure {
+export function encloseStep(rule: Rule, held: FixedValues): (present: Interval) => StepEnclosure {
   let jumps = false;
   const step = stepOver(
     rule,
-    jumpNotingAlgebra(() => {
+    jumpDetectingAlgebra(() => {
       jumps = true;
     }),
   );
-  const width = 1 + rule.memory.length;
+  const width = 1 + rule.lags.length;
   const parameters = Array.from(held.parameters, exactly);
   const inputs = Array.from(held.inputs, exactly);
-  const placeOf = (present: Interval): PlaceOver<Interval> => ({
+  const placeOf = (present: Interval): StepArgumentsOver<Interval> => ({
     state: new Array<Interval>(width).fill(present),
     parameters,
     input: (slot) => inputs[slot]!,
@@ -68,11 +68,11 @@ export function encloseStep(rule: Rule, held: HeldValues): (present: Interval) =
     const place = placeOf(present);
     const value = step.next(place)[0]!;
     const slope = step.slopes(place)[0]!.reduce(plus);
-    if (jumps) return { value, slope: everywhere };
+    if (jumps) return { value, slope: wholeLine };
     const middle = present[0] + (present[1] - present[0]) / 2;
     const center = step.next(placeOf(exactly(middle)))[0]!;
     const centered = plus(center, times(slope, minus(present, exactly(middle))));
     const usable = Number.isFinite(centered[0]) && Number.isFinite(centered[1]) && !Number.isNaN(value[0]);
-    return { value: usable ? meet(value, centered) : value, slope };
+    return { value: usable ? intersection(value, centered) : value, slope };
   };
 }

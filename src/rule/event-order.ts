@@ -2,7 +2,7 @@ import type { Rule } from "./rule.js";
 import { ruleDefinition } from "./rule-definition.js";
 
 /**
- * The order of events inside a period, as one line: what is worked out first, and what the period ends with.
+ * The order of events within a period, as one line.
  *
  * @example eventOrder(recurrence("interest = i*owed\nΔowed = interest - p")); // "interest, then owed at t+1"
  */

@@ -1,29 +1,29 @@
 import type { Expression } from "./syntax/expression.js";
-import { notStrength, strengths, unaryMinusStrength } from "./syntax/strengths.js";
+import { notPrecedence, precedence, unaryMinusPrecedence } from "./syntax/precedence.js";
 
-const closest = 10;
+const atomPrecedence = 10;
 
 const period = (offset: number): string => {
   if (offset === 0) return "";
   return offset > 0 ? `[t+${offset}]` : `[t-${-offset}]`;
 };
 
-function strengthOf(at: Expression): number {
-  if (at.kind === "binary") return strengths.get(at.operator)!;
-  if (at.kind === "unary") return at.operator === "-" ? unaryMinusStrength : notStrength;
-  return closest;
+function precedenceOf(at: Expression): number {
+  if (at.kind === "binary") return precedence.get(at.operator)!;
+  if (at.kind === "unary") return at.operator === "-" ? unaryMinusPrecedence : notPrecedence;
+  return atomPrecedence;
 }
 
-/** Powers and products close up around their signs, sums and comparisons stand apart. */
+/** No spaces around powers and products, spaces around sums and comparisons. */
 const spaced = (operator: string): string =>
   operator === "*" || operator === "/" || operator === "^" ? operator : ` ${operator} `;
 
-function grouped(at: Expression, least: number): string {
+function grouped(at: Expression, minPrecedence: number): string {
   const source = expressionText(at);
-  return strengthOf(at) < least ? `(${source})` : source;
+  return precedenceOf(at) < minPrecedence ? `(${source})` : source;
 }
 
-/** Canonical text of one expression, with no bracket that the order of operations makes needless. */
+/** Canonical text of one expression, without redundant brackets. */
 export function expressionText(at: Expression): string {
   switch (at.kind) {
     case "number":
@@ -31,22 +31,22 @@ export function expressionText(at: Expression): string {
     case "name":
       return `${at.name}${period(at.offset)}`;
     case "unary": {
-      const least = at.operator === "-" ? unaryMinusStrength : notStrength;
-      return `${at.operator === "-" ? "-" : "not "}${grouped(at.operand, least)}`;
+      const minPrecedence = at.operator === "-" ? unaryMinusPrecedence : notPrecedence;
+      return `${at.operator === "-" ? "-" : "not "}${grouped(at.operand, minPrecedence)}`;
     }
     case "binary": {
-      const own = strengths.get(at.operator)!;
+      const own = precedence.get(at.operator)!;
       const toTheRight = at.operator === "^";
-      const chains = own === strengths.get("<");
+      const chains = own === precedence.get("<");
       const left = grouped(at.left, toTheRight || chains ? own + 1 : own);
       const right = groupedRight(at.right, toTheRight ? own : own + 1);
       return `${left}${spaced(at.operator)}${right}`;
     }
     case "call":
-      return `${at.name}(${at.inside.map(expressionText).join(", ")})`;
+      return `${at.name}(${at.args.map(expressionText).join(", ")})`;
   }
 }
 
-/** A sign in front of a right-hand value is bracketed for the reader: a*(-b), although a*-b reads the same. */
-const groupedRight = (at: Expression, least: number): string =>
-  at.kind === "unary" ? `(${expressionText(at)})` : grouped(at, least);
+/** A signed right operand is bracketed for the reader: a*(-b), although a*-b means the same. */
+const groupedRight = (at: Expression, minPrecedence: number): string =>
+  at.kind === "unary" ? `(${expressionText(at)})` : grouped(at, minPrecedence);

@@ -5,12 +5,12 @@ import { ruleDefinition } from "./rule-definition.js";
 import { texExpression } from "./tex/tex-expression.js";
 import { texName } from "./tex/tex-name.js";
 
-/** An expression of the rule language by itself. */
+/** A single expression of the rule language. */
 export interface Formula {
   readonly text: string;
   readonly names: readonly string[];
   readonly tex: string;
-  /** Its value for given names; t where the formula reads it. */
+  /** Its value for given names, and for t where the formula reads it. */
   readonly at: (values: Readonly<Record<string, number>>, t?: number) => number;
 }
 
@@ -35,17 +35,17 @@ function formulaOf(rule: Rule, text: string): Formula {
   };
 }
 
-const known = new Map<string, Formula>();
+const cache = new Map<string, Formula>();
 
 /** Reads an expression of the rule language; a condition has the value 1 or 0. */
-export function formula(text: string, sort: "number" | "condition" = "number"): Formula {
-  const key = `${sort}:${text}`;
-  let found = known.get(key);
+export function formula(text: string, kind: "number" | "condition" = "number"): Formula {
+  const key = `${kind}:${text}`;
+  let found = cache.get(key);
   if (found === undefined) {
-    // The name of the value is one that no formula uses.
-    const body = sort === "number" ? text : `if(${text}, 1, 0)`;
+    // No formula uses this name.
+    const body = kind === "number" ? text : `if(${text}, 1, 0)`;
     found = formulaOf(makeRule(`value_of_formula[t+1] = ${body}`, {}), text);
-    known.set(key, found);
+    cache.set(key, found);
   }
   return found;
 }

@@ -1,15 +1,20 @@
-/** What a rule may call: how many values it takes and what it gives. */
+/** A function of the rule language. */
 export interface RuleFunction {
   readonly name: string;
-  readonly fewest: number;
-  readonly most: number;
-  /** How it is written, for help. */
+  readonly minArgs: number;
+  readonly maxArgs: number;
+  /** How it is written. */
   readonly usage: string;
   readonly meaning: string;
 }
 
-const entry = (name: string, fewest: number, most: number, usage: string, meaning: string): RuleFunction =>
-  Object.freeze({ name, fewest, most, usage, meaning });
+const entry = (
+  name: string,
+  minArgs: number,
+  maxArgs: number,
+  usage: string,
+  meaning: string,
+): RuleFunction => Object.freeze({ name, minArgs, maxArgs, usage, meaning });
 
 /** Every function of the rule language. A name that is not here is not a function. */
 export const ruleFunctions: readonly RuleFunction[] = Object.freeze([
@@ -17,34 +22,34 @@ export const ruleFunctions: readonly RuleFunction[] = Object.freeze([
   entry("log", 1, 1, "log(x)", "natural logarithm"),
   entry("log10", 1, 1, "log10(x)", "logarithm to base 10"),
   entry("sqrt", 1, 1, "sqrt(x)", "square root"),
-  entry("abs", 1, 1, "abs(x)", "size without sign"),
-  entry("sign", 1, 1, "sign(x)", "-1, 0 or 1"),
-  entry("min", 2, 20, "min(a, b, ...)", "smallest of the values"),
-  entry("max", 2, 20, "max(a, b, ...)", "largest of the values"),
-  entry("floor", 1, 1, "floor(x)", "largest whole number not above x"),
-  entry("ceil", 1, 1, "ceil(x)", "smallest whole number not below x"),
-  entry(
-    "round",
-    1,
-    2,
-    "round(x, digits)",
-    "rounded to decimal digits (0 if not given), halves away from zero",
-  ),
+  entry("abs", 1, 1, "abs(x)", "absolute value"),
+  entry("sign", 1, 1, "sign(x)", "sign of x: -1, 0 or 1"),
+  entry("min", 2, 20, "min(a, b, ...)", "smallest of the arguments"),
+  entry("max", 2, 20, "max(a, b, ...)", "largest of the arguments"),
+  entry("floor", 1, 1, "floor(x)", "x rounded down to a whole number"),
+  entry("ceil", 1, 1, "ceil(x)", "x rounded up to a whole number"),
+  entry("round", 1, 2, "round(x, decimals)", "x rounded to decimals (default 0), halves away from zero"),
   entry("mod", 2, 2, "mod(x, m)", "remainder of x divided by m, with the sign of m"),
   entry("sin", 1, 1, "sin(x)", "sine of x in radians"),
   entry("cos", 1, 1, "cos(x)", "cosine of x in radians"),
   entry("tan", 1, 1, "tan(x)", "tangent of x in radians"),
   entry("asin", 1, 1, "asin(x)", "angle in radians whose sine is x"),
-  entry("if", 3, 3, "if(condition, a, b)", "a where the condition holds, otherwise b"),
-  entry("change", 1, 1, "change(X) = ...", "the change of state X from this period to the next"),
+  entry("if", 3, 3, "if(condition, a, b)", "a if the condition is true, otherwise b"),
+  entry(
+    "change",
+    1,
+    1,
+    "change(X) = ...",
+    "sets the change of state X from this period to the next; same as ΔX = ...",
+  ),
 ]);
 
 const byName: ReadonlyMap<string, RuleFunction> = new Map(ruleFunctions.map((one) => [one.name, one]));
 
-/** The function of that name, if the rule language has it. */
+/** The function of that name; undefined when there is none. */
 export const ruleFunction = (name: string): RuleFunction | undefined => byName.get(name);
 
-/** Words with a meaning of their own: no state, quantity, input or parameter may be called so. */
+/** Names that no state, quantity, input or parameter may have. */
 export const reservedWords: ReadonlySet<string> = new Set([
   "t",
   "and",

@@ -1,5 +1,5 @@
 import { derivativeBy } from "./graph/differentiate.js";
-import { stepDerivatives } from "./graph/step-derivatives.js";
+import { stepJacobian } from "./graph/step-jacobian.js";
 import type { Rule } from "./rule.js";
 import { ruleDefinition } from "./rule-definition.js";
 
@@ -12,7 +12,7 @@ import { ruleDefinition } from "./rule-definition.js";
  */
 export function linearInParameters(rule: Rule, among: readonly string[] = rule.parameters): boolean {
   const { graph } = ruleDefinition(rule).graph;
-  const { byParameter } = stepDerivatives(ruleDefinition(rule).graph);
+  const { byParameter } = stepJacobian(ruleDefinition(rule).graph);
   const slots = among.map((name) => rule.parameters.indexOf(name)).filter((slot) => slot >= 0);
   const zero = graph.number(0);
   return slots.every((slot) => {

@@ -1,10 +1,10 @@
 import { graphEvaluator } from "./code/graph-evaluator.js";
-import type { StepPlace } from "./explain-failure.js";
+import type { StepArguments } from "./explain-failure.js";
 import type { Rule } from "./rule.js";
 import { ruleDefinition } from "./rule-definition.js";
 
-/** A function that gives the rule's quantities, in order, in the step from a place. */
-export function quantitiesAt(rule: Rule): (place: StepPlace) => readonly number[] {
+/** A function that evaluates the quantities of the rule, in order, for the arguments of a step. */
+export function quantitiesAt(rule: Rule): (place: StepArguments) => readonly number[] {
   const { quantities } = ruleDefinition(rule).graph;
   const evaluate = graphEvaluator(quantities);
   return (place) => {

@@ -12,6 +12,6 @@ export function readNames(at: Expression): readonly Extract<Expression, { kind: 
     case "binary":
       return [...readNames(at.left), ...readNames(at.right)];
     case "call":
-      return at.inside.flatMap(readNames);
+      return at.args.flatMap(readNames);
   }
 }

@@ -1,21 +1,23 @@
 import type { ProcessNoise } from "./rule.js";
 
-/** What can be said of a rule beside its text. */
+/** Options of a rule. */
 export interface RecurrenceOptions {
-  /** The only names that are parameters; any other free name is then refused. Default: every free name is one. */
+  /** Name of the rule in titles, tables and sentences; default: its text, or its name in the catalogue. */
+  readonly name?: string;
+  /** All parameters; any other free name is then an error. Default: every free name is a parameter. */
   readonly parameters?: readonly string[];
-  /** Names that are recorded by period: columns of the record. Only they may be read at [t+1]. */
+  /** Names that are recorded by period, as columns of the record. Only inputs can be read at [t+1]. */
   readonly inputs?: readonly string[];
-  /** Unit by name. */
+  /** Unit by name, such as { N: "cells/mL", r: "1/hour" }. */
   readonly units?: Readonly<Record<string, string>>;
-  /** Lowest and highest admitted value by state or parameter; infinite where open. */
+  /** Lower and upper bound by state or parameter, as in { K: [0, Infinity] }. */
   readonly bounds?: Readonly<Record<string, readonly [number, number]>>;
-  /** Where a fit starts, by parameter. */
+  /** Starting value of a fit, by parameter. */
   readonly start?: Readonly<Record<string, number>>;
-  /** Parameters that no fit changes. */
+  /** Parameters held at a value in every fit. */
   readonly fixed?: Readonly<Record<string, number>>;
-  /** By state: its first value, its first values oldest first where the rule reads past ones, or "estimated". */
+  /** By state: its first value; a list, oldest first, where the rule reads past values; or "estimated". */
   readonly initial?: Readonly<Record<string, number | readonly number[] | "estimated">>;
-  /** By state: random change added in every period. */
+  /** Process noise by state. */
   readonly noise?: Readonly<Record<string, ProcessNoise>>;
 }

@@ -3,16 +3,20 @@ import type { RecurrenceOptions } from "./recurrence-options.js";
 import type { Rule } from "./rule.js";
 
 /**
- * Reads a rule of change from text: one line a quantity, in the order of events inside the period.
+ * Reads a rule (a recurrence) from text: one line per equation, in the order of events within the period.
  *
  * `N[t+1] = ...` sets the next value of a state, `ΔN = ...` or `change(N) = ...` its change, and `q = ...` a
- * quantity inside the period. `N` is the present value, `N[t-2]` a past one, `t` the period index.
+ * quantity within the period. `N` is the present value, `N[t-2]` a past one, `t` the period index. Every other name
+ * is a parameter, unless `parameters` or `inputs` say otherwise.
  *
- * @param text - the lines; `#` begins a comment. Signs: + - * / ^, comparison, and, or, not, and the functions
- *   of `ruleLanguage()`.
- * @param options - what the names are, their units, bounds, starts and fixed values.
+ * Operators: + - * / ^ < <= > >= == != and or not. Functions: exp(x), log(x) (natural), log10(x), sqrt(x), abs(x),
+ * sign(x), min(a, b, ...), max(a, b, ...), floor(x), ceil(x), round(x, decimals), mod(x, m), sin(x), cos(x), tan(x),
+ * asin(x), if(condition, a, b). `ruleLanguage()` lists them with their meaning.
+ *
+ * @param text - the lines; `#` begins a comment.
+ * @param options - inputs, units, bounds, starting values, fixed values, initial states, noise.
  * @returns a frozen plain object; `compileRule` runs it.
- * @throws {ModelError} a kebab-case code for each kind of mistake, with `facts.start` and `facts.end`, UTF-16
+ * @throws {ModelError} with a code for each kind of mistake, and `facts.start` and `facts.end`, UTF-16
  *   offsets into `facts.text`, which is the normalised text.
  * @example recurrence("ΔN = r*N*(1 - N/K)").parameters; // ["r", "K"]
  */

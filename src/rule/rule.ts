@@ -1,49 +1,51 @@
 import type { Warning } from "../numeric/index.js";
 import type { NamedRule } from "./catalogue/named-rule.js";
 
-/** Random change added in every period: on the value itself (`normal`), or as a factor exp(sd z) (`lognormal`). */
+/** Process noise of one state: added to the value (`normal`), or as a factor exp(sd*z) (`lognormal`). */
 export interface ProcessNoise {
   readonly distribution: "normal" | "lognormal";
-  /** Of `lognormal`: the factor has median 1 (default), or mean 1. */
+  /** For `lognormal`: whether the factor has median 1 (default) or mean 1. */
   readonly centre?: "median" | "mean";
-  /** Standard deviation a period: a number, or the name of a parameter of the rule. */
+  /** Standard deviation per period: a number, or the name of a parameter of the rule. */
   readonly sd: number | string;
 }
 
-/** A recurrence: text that was read, checked, and made ready to be run, differentiated and printed. */
+/** A recurrence, read from text and checked. */
 export interface Rule {
   readonly kind: "rule";
+  /** What it is called in titles, tables and sentences; absent where neither the options nor the catalogue say. */
+  readonly name?: string;
   /** The text as given, normalised (NFC), comments kept. */
   readonly text: string;
   /** How the first state is stated: `X[t+1] = ...` or `ΔX = ...`. */
   readonly form: "next" | "change";
   readonly states: readonly string[];
   /**
-   * Past values that the rule reads, for rules with lags; empty otherwise. The state vector of the compiled
-   * rule is the states in order and then these.
+   * Past values that the rule reads; empty for a rule without lags. The state vector of the compiled rule is the
+   * states in order, followed by these.
    */
-  readonly memory: readonly { readonly state: string; readonly lag: number }[];
-  /** Named values inside the period, in event order. */
+  readonly lags: readonly { readonly state: string; readonly lag: number }[];
+  /** Named values within the period, in order of evaluation. */
   readonly quantities: readonly string[];
   readonly inputs: readonly string[];
   /** Parameters in order of first appearance. */
   readonly parameters: readonly string[];
-  /** By name; "" or absent = no unit stated. */
+  /** By name; "" or absent = no unit given. */
   readonly units: Readonly<Record<string, string>>;
-  /** Lowest and highest admitted value by parameter or state; infinite where open. */
+  /** Lower and upper bound by parameter or state. */
   readonly bounds: Readonly<Record<string, readonly [number, number]>>;
   /** Starting values for a fit, by parameter. */
   readonly start: Readonly<Record<string, number>>;
   /** Parameters held at a value in every fit. */
   readonly fixed: Readonly<Record<string, number>>;
   /**
-   * By state, where stated: the value at the first period; a list, oldest first, where the rule reads past
-   * values; or "estimated".
+   * By state, where given: the value at the first period; a list, oldest first, where the rule reads past values;
+   * or "estimated".
    */
   readonly initial: Readonly<Record<string, number | readonly number[] | "estimated">>;
-  /** By state, where stated. */
+  /** By state, where given. */
   readonly noise: Readonly<Record<string, ProcessNoise>>;
   readonly findings: readonly Warning[];
-  /** What the catalogue knows of the rule, if it is from there. */
+  /** The catalogue entry of the rule, if it comes from there. */
   readonly named?: NamedRule;
 }

@@ -1,24 +1,27 @@
-/** One record of a text file: its cells, and the line on which it begins. */
+/** One record of a delimited text file: its cells, and the line on which it starts. */
 export interface CsvRecord {
   readonly cells: readonly string[];
   readonly line: number;
 }
 
-/** A quoted cell that the end of the text leaves open. */
-export interface UnendedQuote {
-  readonly unendedQuoteAt: number;
+/** A quoted cell that is not closed. */
+export interface UnclosedQuote {
+  readonly unclosedQuoteAt: number;
 }
 
 /**
- * The records of delimited text (RFC 4180): a quoted cell may hold the delimiter, line breaks and doubled
- * quotes. Lines end with CR, LF or both. Empty lines are passed over, as in every reader of such files.
+ * The records of delimited text (RFC 4180): a quoted cell may contain the delimiter, line breaks and doubled
+ * quotes. Lines end with CR, LF or both. Empty lines are skipped.
  */
-export function* csvRecords(text: string, delimiter: string): Generator<CsvRecord, UnendedQuote | undefined> {
+export function* csvRecords(
+  text: string,
+  delimiter: string,
+): Generator<CsvRecord, UnclosedQuote | undefined> {
   let at = text.startsWith("\ufeff") ? 1 : 0;
   let line = 1;
   while (at < text.length) {
     const read = recordAt(text, at, delimiter);
-    if (read === undefined) return { unendedQuoteAt: line };
+    if (read === undefined) return { unclosedQuoteAt: line };
     const { cells, next, breaks } = read;
     if (cells.length > 1 || cells[0] !== "") yield { cells, line };
     line += breaks + 1;
@@ -27,7 +30,7 @@ export function* csvRecords(text: string, delimiter: string): Generator<CsvRecor
   return undefined;
 }
 
-/** The record that begins at a place: its cells, where the next one begins, and the line breaks inside cells. */
+/** The record at an offset: its cells, the offset of the next one, and the line breaks inside its cells. */
 function recordAt(
   text: string,
   from: number,
@@ -62,17 +65,17 @@ function endOfPlain(text: string, from: number, delimiter: string): number {
   return at;
 }
 
-/** Place after the closing quote, or -1 when there is none or text stands behind it. */
+/** Offset after the closing quote, or -1 when there is none or text follows it. */
 function endOfQuoted(text: string, from: number, delimiter: string): number {
   let at = from + 1;
   for (;;) {
     at = text.indexOf('"', at);
     if (at < 0) return -1;
-    if (text[at + 1] !== '"') return ends(text, at + 1, delimiter) ? at + 1 : -1;
+    if (text[at + 1] !== '"') return isCellEnd(text, at + 1, delimiter) ? at + 1 : -1;
     at += 2;
   }
 }
 
-function ends(text: string, at: number, delimiter: string): boolean {
+function isCellEnd(text: string, at: number, delimiter: string): boolean {
   return at >= text.length || text[at] === delimiter || text[at] === "\n" || text[at] === "\r";
 }

@@ -1,11 +1,13 @@
 import type { DuckDBConnection, DuckDBInstance } from "@duckdb/node-api";
 
-let started: Promise<DuckDBInstance> | undefined;
+let memoryDatabase: Promise<DuckDBInstance> | undefined;
 
-/** Runs work on a connection of the in-memory database, which is loaded when first asked for. */
+/** Runs work on a connection of the in-memory database, which is loaded on first use. */
 export async function withDatabase<T>(work: (connection: DuckDBConnection) => Promise<T>): Promise<T> {
-  started ??= import("@duckdb/node-api").then(({ DuckDBInstance }) => DuckDBInstance.create(":memory:"));
-  const connection = await (await started).connect();
+  memoryDatabase ??= import("@duckdb/node-api").then(({ DuckDBInstance }) =>
+    DuckDBInstance.create(":memory:"),
+  );
+  const connection = await (await memoryDatabase).connect();
   try {
     return await work(connection);
   } finally {
@@ -30,18 +32,18 @@ export async function withDatabaseFile<T>(
   }
 }
 
-/** The first line of what the engine said, without the path that the analyst did not write. */
-export function reasonOf(cause: unknown, path: string): string {
+/** The first line of an error of the engine, without the absolute path. */
+export function firstLineOf(cause: unknown, path: string): string {
   const text = cause instanceof Error ? cause.message : String(cause);
   return text.split("\n", 1)[0]!.replaceAll(path, "the file").replace(/\.$/, "");
 }
 
-/** A text as an SQL literal. */
-export function quoted(text: string): string {
+/** A string as an SQL literal. */
+export function sqlString(text: string): string {
   return `'${text.replaceAll("'", "''")}'`;
 }
 
 /** A name as an SQL identifier. */
-export function identifier(name: string): string {
+export function sqlIdentifier(name: string): string {
   return `"${name.replaceAll('"', '""')}"`;
 }

@@ -1,10 +1,10 @@
-import { identifier, reasonOf, withDatabaseFile } from "./database.js";
+import { firstLineOf, sqlIdentifier, withDatabaseFile } from "./database.js";
+import { tableNotFoundError, unclearTableError, unreadableFileError } from "./errors.js";
 import type { ReadOptions } from "./read-options.js";
 import { readRelation } from "./read-relation.js";
-import { noSuchTable, tableUnclear, unreadableFile } from "./refusals.js";
 import type { FileColumns } from "./stored-table.js";
 
-/** Reads a table of a DuckDB database file: the one asked for, or the only one. */
+/** Reads a table of a DuckDB database file: the one named, or the only one. */
 export async function readDuckdb(
   path: string,
   shownPath: string,
@@ -16,12 +16,12 @@ export async function readDuckdb(
     );
     const names = (await listed.getRows()).map(([name]) => String(name));
     if (options.table !== undefined && !names.includes(options.table))
-      throw noSuchTable(shownPath, options.table, names);
-    if (options.table === undefined && names.length !== 1) throw tableUnclear(shownPath, names);
-    return readRelation(connection, identifier(options.table ?? names[0]!));
+      throw tableNotFoundError(shownPath, options.table, names);
+    if (options.table === undefined && names.length !== 1) throw unclearTableError(shownPath, names);
+    return readRelation(connection, sqlIdentifier(options.table ?? names[0]!));
   }).catch((cause) => {
     throw cause.name === "ModelError"
       ? cause
-      : unreadableFile(shownPath, "a DuckDB database", reasonOf(cause, path), cause);
+      : unreadableFileError(shownPath, "a DuckDB database", firstLineOf(cause, path), cause);
   });
 }

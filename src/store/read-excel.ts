@@ -1,36 +1,48 @@
 import { readFile } from "node:fs/promises";
 import type { CellObject, WorkBook, WorkSheet } from "xlsx";
+import { plural } from "../../kernel-helpers/wording/index.js";
 import { type Column, packed } from "../record/index.js";
 import { columnNames } from "./column-names.js";
-import { reasonOf } from "./database.js";
+import { firstLineOf } from "./database.js";
+import {
+  formulaWithoutValueError,
+  noDataRowsError,
+  tableNotFoundError,
+  unclearTableError,
+  unreadableFileError,
+} from "./errors.js";
 import type { ReadOptions } from "./read-options.js";
-import { emptyFile, formulaWithoutValue, noSuchTable, tableUnclear, unreadableFile } from "./refusals.js";
-import { sheetCell } from "./sheet-cell.js";
+import { sheetCellValue } from "./sheet-cell.js";
 import type { FileColumns } from "./stored-table.js";
 import { workbooks } from "./workbooks.js";
 
-/** Reads a sheet of a workbook: the one asked for, or the only one that holds cells. */
+/** Reads a sheet of a workbook: the one named, or the only one that has cells. */
 export async function readExcel(path: string, shownPath: string, options: ReadOptions): Promise<FileColumns> {
-  const book = opened(await readFile(path), shownPath, path);
+  const book = parseWorkbook(await readFile(path), shownPath, path);
   const filled = book.SheetNames.filter((name) => book.Sheets[name]?.["!ref"] !== undefined);
   const { table } = options;
-  if (table !== undefined && !filled.includes(table)) throw noSuchTable(shownPath, table, filled);
-  if (filled.length === 0) throw emptyFile(shownPath);
-  if (table === undefined && filled.length > 1) throw tableUnclear(shownPath, filled);
-  const late = book.Workbook?.WBProps?.date1904 === true;
-  return readSheet(gridOf(book.Sheets[table ?? filled[0]!]!, options.skip ?? 0), late, shownPath, options);
+  if (table !== undefined && !filled.includes(table)) throw tableNotFoundError(shownPath, table, filled);
+  if (filled.length === 0) throw noDataRowsError(shownPath);
+  if (table === undefined && filled.length > 1) throw unclearTableError(shownPath, filled);
+  const since1904 = book.Workbook?.WBProps?.date1904 === true;
+  return readSheet(
+    gridOf(book.Sheets[table ?? filled[0]!]!, options.skip ?? 0),
+    since1904,
+    shownPath,
+    options,
+  );
 }
 
-function opened(bytes: Buffer, shownPath: string, path: string): WorkBook {
+function parseWorkbook(bytes: Buffer, shownPath: string, path: string): WorkBook {
   try {
-    // Formulas are never computed here: the value saved with the file is read, and the formula only told of.
+    // Formulas are not computed: the value saved with the file is read, and the formula is only reported.
     return workbooks().read(bytes, { cellFormula: true, cellHTML: false, cellNF: true, cellText: false });
   } catch (cause) {
-    throw unreadableFile(shownPath, "a workbook", reasonOf(cause, path), cause);
+    throw unreadableFileError(shownPath, "a workbook", firstLineOf(cause, path), cause);
   }
 }
 
-/** Cells of a sheet by row, from its first filled corner on, empty rows at the end left out. */
+/** Cells of a sheet by row, from its first filled corner on, without the empty rows at the end. */
 type Grid = readonly (readonly (CellObject | undefined)[])[];
 
 function gridOf(sheet: WorkSheet, skip: number): Grid {
@@ -48,9 +60,9 @@ function gridOf(sheet: WorkSheet, skip: number): Grid {
   return rows;
 }
 
-function readSheet(grid: Grid, late: boolean, path: string, options: ReadOptions): FileColumns {
+function readSheet(grid: Grid, since1904: boolean, path: string, options: ReadOptions): FileColumns {
   const [top] = grid;
-  if (top === undefined) throw emptyFile(path);
+  if (top === undefined) throw noDataRowsError(path);
   const found: string[] = [];
   const headed = options.header !== false;
   const names = columnNames(
@@ -62,7 +74,7 @@ function readSheet(grid: Grid, late: boolean, path: string, options: ReadOptions
   const columns = names.map((name, at): Column => {
     const cells = rows.map((row) => row[at]);
     noteFormulas(cells, name, path, found);
-    const values = cells.map((cell) => sheetCell(cell, late));
+    const values = cells.map((cell) => sheetCellValue(cell, since1904));
     return packed(values.map((value) => (missing.has(value) ? null : value)));
   });
   return { names, columns, found };
@@ -75,8 +87,7 @@ function noteFormulas(
   found: string[],
 ): void {
   const empty = cells.findIndex((cell) => cell?.f !== undefined && cell.v === undefined);
-  if (empty >= 0) throw formulaWithoutValue(path, empty + 1, name, cells[empty]!.f!);
+  if (empty >= 0) throw formulaWithoutValueError(path, empty + 1, name, cells[empty]!.f!);
   const formulas = cells.filter((cell) => cell?.f !== undefined).length;
-  if (formulas > 0)
-    found.push(`In "${name}" ${formulas} cells are formulas; the values saved with the file are read.`);
+  if (formulas > 0) found.push(`Column "${name}": read the saved value of ${plural(formulas, "formula")}.`);
 }

@@ -1,24 +1,28 @@
 import { readFile } from "node:fs/promises";
 import { type ColumnTable, packed, tableOfRows } from "../record/index.js";
-import { decodedText } from "./decoded-text.js";
+import { decodeText } from "./decode-text.js";
+import { unreadableFileError } from "./errors.js";
 import type { ReadOptions } from "./read-options.js";
-import { unreadableFile } from "./refusals.js";
 import type { FileColumns } from "./stored-table.js";
 
 /** Reads JSON: an array of row objects, one such object a line, or an object of columns of equal length. */
 export async function readJson(path: string, shownPath: string, options: ReadOptions): Promise<FileColumns> {
-  const text = decodedText(await readFile(path), shownPath, options.encoding);
-  const table = tableOfJson(parsed(text, shownPath));
+  const text = decodeText(await readFile(path), shownPath, options.encoding);
+  const table = tableOfJson(parseJson(text, shownPath));
   if (table === undefined)
-    throw unreadableFile(shownPath, "JSON", "it is neither rows as objects nor columns of equal length");
+    throw unreadableFileError(
+      shownPath,
+      "JSON",
+      "it contains neither an array of row objects nor columns of equal length",
+    );
   const missing = new Set<unknown>(options.missing);
   const columns = table.columns.map((column) =>
-    packed(Array.from<unknown>(column).map((cell) => flat(cell, missing))),
+    packed(Array.from<unknown>(column).map((cell) => cellValue(cell, missing))),
   );
   return { names: table.names, columns, found: [] };
 }
 
-function parsed(text: string, path: string): unknown {
+function parseJson(text: string, path: string): unknown {
   try {
     return JSON.parse(text);
   } catch (cause) {
@@ -26,9 +30,9 @@ function parsed(text: string, path: string): unknown {
     try {
       if (lines.length > 1) return lines.map((line): unknown => JSON.parse(line));
     } catch {
-      // The first reason is the one to tell: the text is not a document of one value.
+      // The first error is reported: the text is not one JSON document.
     }
-    throw unreadableFile(path, "JSON", (cause as Error).message, cause);
+    throw unreadableFileError(path, "JSON", (cause as Error).message, cause);
   }
 }
 
@@ -43,8 +47,8 @@ function tableOfJson(value: unknown): ColumnTable | undefined {
   return { names: columns.map(([name]) => name), columns: columns.map(([, cells]) => cells as unknown[]) };
 }
 
-/** A cell that is itself a list or an object is kept as its text. */
-function flat(cell: unknown, missing: ReadonlySet<unknown>): unknown {
+/** A cell that is itself an array or an object is kept as text. */
+function cellValue(cell: unknown, missing: ReadonlySet<unknown>): unknown {
   if (cell === undefined || missing.has(cell)) return null;
   return typeof cell === "object" && cell !== null ? JSON.stringify(cell) : cell;
 }

@@ -1,24 +1,24 @@
-/** What a file may hold. */
+/** File formats. */
 export type Format = "csv" | "tsv" | "json" | "parquet" | "excel" | "duckdb";
 
-/** How to read a file where it cannot say so itself. */
+/** How to read a file where its contents leave it open. */
 export interface ReadOptions {
-  /** Default: by the ending of the file's name. */
+  /** Default: by the file extension. */
   readonly format?: Format;
-  /** What separates the cells of a text file: ",", ";", a tab or "|"; found where the file shows it. */
+  /** Delimiter of a text file: ",", ";", "\t" or "|". Default: detected. */
   readonly delimiter?: string;
-  /** Decimal sign of a text file; the other sign is then taken as separator of thousands. */
+  /** Decimal sign of a text file; the other sign is then read as thousands separator. Default: detected. */
   readonly decimal?: "." | ",";
-  /** Order of dates written with numbers, or "text" to leave them as they are. */
+  /** Order of dates written with numbers, or "text" to leave them unchanged. Default: detected. */
   readonly dates?: "day-month-year" | "month-day-year" | "text";
-  /** Texts that mark a missing value: `["n.d.", "NA"]`. An empty cell always does. */
+  /** Texts that mean a missing value, such as `["n.d.", "NA"]`. An empty cell always does. */
   readonly missing?: readonly string[];
-  /** Encoding of a text file, such as "windows-1252"; default UTF-8, or what its byte-order mark says. */
+  /** Encoding of a text file, such as "windows-1252". Default: UTF-8, or as its byte-order mark says. */
   readonly encoding?: string;
-  /** Lines above the header; default 0. */
+  /** Number of lines above the header. Default 0. */
   readonly skip?: number;
-  /** Whether the first row names the columns; default true. */
+  /** Whether the first row has the column names. Default true. */
   readonly header?: boolean;
-  /** Sheet of a workbook, or table of a database; needed where there are several. */
+  /** Sheet of a workbook, or table of a database file; required when there are several. */
   readonly table?: string;
 }

@@ -5,9 +5,8 @@ import type { FileColumns } from "./stored-table.js";
 import { streamColumns } from "./stream-columns.js";
 
 /**
- * Reads a plain text file by the database engine, or gives undefined: where the engine refuses a row that the
- * first ones did not foretell, or a number came through altered. The file is then read cell by cell, where the
- * reason can be told with row, column and value.
+ * Reads a plain text file with the database engine. Undefined when the engine rejects a row or a number has lost
+ * digits: the file is then read cell by cell, so that an error can name row, column and value.
  */
 export async function readPlainCsv({
   from,
@@ -19,13 +18,13 @@ export async function readPlainCsv({
   const query = `SELECT ${selected.join(", ")} FROM ${from}`;
   const columns = await withDatabase((connection) => streamColumns(connection, query, kinds)).catch(() => []);
   const last = (columns[0]?.length ?? 0) - 1;
-  if (last < 0 || columns.every((column) => isEmpty(column[last])) || columns.some(isAltered))
+  if (last < 0 || columns.every((column) => isEmpty(column[last])) || columns.some(hasLostDigits))
     return undefined;
   return { names, columns, found };
 }
 
-/** A whole number past 2^53 may have lost digits on the way. */
-function isAltered(column: Column): boolean {
+/** An integer above 2^53 may have lost digits. */
+function hasLostDigits(column: Column): boolean {
   if (!(column instanceof Float64Array)) return false;
   for (let row = 0; row < column.length; row++) {
     const value = column[row]!;

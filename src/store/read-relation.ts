@@ -6,7 +6,7 @@ import { streamColumns } from "./stream-columns.js";
 /**
  * Reads every column of a table, file or query of the database engine.
  *
- * @param from - SQL that stands after FROM.
+ * @param from - SQL after FROM.
  */
 export async function readRelation(connection: DuckDBConnection, from: string): Promise<FileColumns> {
   const { names, kinds, selected, found } = await relationOf(connection, from);

@@ -1,62 +1,62 @@
 import type { DuckDBConnection } from "@duckdb/node-api";
-import { identifier } from "./database.js";
+import { sqlIdentifier } from "./database.js";
 import type { ColumnKind } from "./stream-columns.js";
 
-/** A table, file or query of the database engine, and how its columns are read from it. */
+/** A table, file or query of the database engine, and how its columns are read. */
 export interface Relation {
-  /** SQL that stands after FROM. */
+  /** SQL after FROM. */
   readonly from: string;
   readonly names: readonly string[];
   readonly kinds: readonly ColumnKind[];
-  /** SQL of each column, by its kind. */
+  /** SQL expression of each column. */
   readonly selected: readonly string[];
   readonly found: readonly string[];
 }
 
 const numeric = /^(TINYINT|SMALLINT|INTEGER|UTINYINT|USMALLINT|UINTEGER|FLOAT|DOUBLE|DECIMAL)/;
-const long = /^(BIGINT|UBIGINT|HUGEINT|UHUGEINT)$/;
+const integer64 = /^(BIGINT|UBIGINT|HUGEINT|UHUGEINT)$/;
 
-/** Asks the engine what columns there are: numbers are read as doubles, dates and anything else as text. */
+/** Asks the engine for its columns: numbers are read as doubles, dates and anything else as text. */
 export async function relationOf(connection: DuckDBConnection, from: string): Promise<Relation> {
   const described = await (await connection.run(`DESCRIBE SELECT * FROM ${from}`)).getRows();
   const columns = described.map(([name, type]) => ({ name: String(name), type: String(type) }));
-  const wide = await tooLong(
+  const beyondDoubles = await columnsBeyondDoubles(
     connection,
     from,
-    columns.filter(({ type }) => long.test(type)).map(({ name }) => name),
+    columns.filter(({ type }) => integer64.test(type)).map(({ name }) => name),
   );
-  const kinds = columns.map(({ name, type }) => (wide.includes(name) ? "text" : kindOf(type)));
+  const kinds = columns.map(({ name, type }) => (beyondDoubles.includes(name) ? "text" : kindOf(type)));
   return {
     from,
     names: columns.map(({ name }) => name),
     kinds,
-    selected: columns.map(({ name }, i) => selectedAs(identifier(name), kinds[i]!)),
-    found: wide.map(
-      (name) => `Whole numbers of "${name}" are longer than a number keeps and are read as text.`,
+    selected: columns.map(({ name }, i) => selectExpression(sqlIdentifier(name), kinds[i]!)),
+    found: beyondDoubles.map(
+      (name) => `Column "${name}" has integers above 2^53; it is read as text so that no digit is lost.`,
     ),
   };
 }
 
 function kindOf(type: string): ColumnKind {
-  if (numeric.test(type) || long.test(type)) return "number";
+  if (numeric.test(type) || integer64.test(type)) return "number";
   return type === "BOOLEAN" ? "boolean" : "text";
 }
 
-/** A missing number is selected as NaN: a column without empty cells is read without asking each whether it is there. */
-export function selectedAs(name: string, kind: ColumnKind): string {
+/** A missing number is selected as NaN, so that a column can be read without a validity check per cell. */
+export function selectExpression(name: string, kind: ColumnKind): string {
   if (kind === "number") return `coalesce(CAST(${name} AS DOUBLE), 'nan'::DOUBLE)`;
   return kind === "boolean" ? name : `CAST(${name} AS VARCHAR)`;
 }
 
-/** Of columns of long whole numbers, those that hold one past 2^53, which a double would alter. */
-async function tooLong(
+/** Integer columns with a value above 2^53, which a double cannot hold. */
+async function columnsBeyondDoubles(
   connection: DuckDBConnection,
   from: string,
   names: readonly string[],
 ): Promise<readonly string[]> {
   if (names.length === 0) return [];
   const tests = names.map(
-    (name) => `coalesce(max(abs(CAST(${identifier(name)} AS HUGEINT))) > 9007199254740991, false)`,
+    (name) => `coalesce(max(abs(CAST(${sqlIdentifier(name)} AS HUGEINT))) > 9007199254740991, false)`,
   );
   const [row] = await (await connection.run(`SELECT ${tests.join(", ")} FROM ${from}`)).getRows();
   return names.filter((_, i) => row?.[i] === true);

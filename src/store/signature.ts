@@ -8,8 +8,8 @@ const signatures: readonly { readonly format: Format; readonly at: number; reado
   { format: "duckdb", at: 8, bytes: "DUCK" },
 ];
 
-/** What the first bytes of a file say it is, whatever its name says; undefined for text. */
-export async function signatureOf(path: string): Promise<Format | undefined> {
+/** Format by the first bytes of a file, whatever its extension; undefined for text. */
+export async function formatOfSignature(path: string): Promise<Format | undefined> {
   const file = await open(path);
   try {
     const { buffer, bytesRead } = await file.read(Buffer.alloc(16), 0, 16, 0);

@@ -1,39 +1,39 @@
 import type { DuckDBConnection, DuckDBDataChunk, DuckDBVector } from "@duckdb/node-api";
 import type { Column } from "../record/index.js";
-import { addTexts } from "./text-vector.js";
+import { appendTexts } from "./text-vector.js";
 
-/** What a column of a query holds: numbers without empty cells (NaN where missing), truth values, or text. */
+/** Kind of a query column: numbers (NaN where missing), booleans, or text. */
 export type ColumnKind = "number" | "boolean" | "text";
 
-/** Runs a query and gathers its columns piece by piece, so that reading goes on while a piece is unpacked. */
+/** Runs a query and collects its columns chunk by chunk, so that reading overlaps with unpacking. */
 export async function streamColumns(
   connection: DuckDBConnection,
   query: string,
   kinds: readonly ColumnKind[],
 ): Promise<readonly Column[]> {
-  const gathered = kinds.map((kind) => (kind === "number" ? numbers() : cells(kind)));
+  const builders = kinds.map((kind) => (kind === "number" ? numberBuilder() : cellBuilder(kind)));
   const result = await connection.stream(query);
   for (;;) {
     const chunk = await result.fetchChunk();
     const rows = chunk?.rowCount ?? 0;
-    if (chunk === null || rows === 0) return gathered.map(({ column }) => column());
-    gathered.forEach(({ add }, at) => {
+    if (chunk === null || rows === 0) return builders.map(({ column }) => column());
+    builders.forEach(({ add }, at) => {
       add(chunk, at, rows);
     });
   }
 }
 
-interface Gathered {
+interface ColumnBuilder {
   readonly add: (chunk: DuckDBDataChunk, at: number, rows: number) => void;
   readonly column: () => Column;
 }
 
-function numbers(): Gathered {
+function numberBuilder(): ColumnBuilder {
   const pieces: Float64Array[] = [];
   let count = 0;
   return {
     add(chunk, at, rows) {
-      pieces.push(numbersOf(chunk.getColumnVector(at), rows));
+      pieces.push(vectorNumbers(chunk.getColumnVector(at), rows));
       count += rows;
     },
     column() {
@@ -48,8 +48,8 @@ function numbers(): Gathered {
   };
 }
 
-function numbersOf(vector: DuckDBVector, rows: number): Float64Array {
-  // Not in the package's types: present in the pinned version, and done without where it is not.
+function vectorNumbers(vector: DuckDBVector, rows: number): Float64Array {
+  // Not in the types of the package: present in the pinned version, with a fallback where it is not.
   const { items } = vector as unknown as { items?: unknown };
   if (items instanceof Float64Array) return items.slice(0, rows);
   const values = new Float64Array(rows);
@@ -57,12 +57,12 @@ function numbersOf(vector: DuckDBVector, rows: number): Float64Array {
   return values;
 }
 
-function cells(kind: "boolean" | "text"): Gathered {
+function cellBuilder(kind: "boolean" | "text"): ColumnBuilder {
   const gathered: unknown[] = [];
   return {
     add(chunk, at, rows) {
       const vector = chunk.getColumnVector(at);
-      if (kind === "text") addTexts(vector, rows, gathered as (string | null)[]);
+      if (kind === "text") appendTexts(vector, rows, gathered as (string | null)[]);
       else for (let row = 0; row < rows; row++) gathered.push(vector.getItem(row));
     },
     column: () => gathered,

@@ -4,19 +4,19 @@ import { join, resolve } from "node:path";
 import type { DuckDBConnection, DuckDBDataChunk } from "@duckdb/node-api";
 import { nearestNames } from "../numeric/index.js";
 import { type ColumnTable, packed } from "../record/index.js";
-import { delimiterOf } from "./csv-dialect.js";
-import { identifier, quoted } from "./database.js";
-import { formatOfEnding } from "./format-of-ending.js";
-import { plainCsv } from "./plain-csv.js";
+import { sqlIdentifier, sqlString } from "./database.js";
+import { detectDelimiter } from "./detect-delimiter.js";
+import { columnNotFoundError, notStreamableError } from "./errors.js";
+import { formatOfExtension } from "./file-extension.js";
+import { plainCsvRelation } from "./plain-csv.js";
 import type { ReadOptions } from "./read-options.js";
-import { noSuchColumn, notStreamable } from "./refusals.js";
 import { type Relation, relationOf } from "./relation.js";
-import { signatureOf } from "./signature.js";
+import { formatOfSignature } from "./signature.js";
 import { textHead } from "./text-head.js";
 
-/** One series of a file: its name, its columns, and the rows of the file that they come from. */
+/** One series of a file: its name, its columns, and its rows in the file. */
 export interface StoredSeries {
-  /** Cells of the columns that tell series apart, joined by ", ". */
+  /** Values of the columns in `by`, joined by ", ". */
   readonly name: string;
   readonly table: ColumnTable;
   /** 1-based rows of the file, header not counted. */
@@ -25,18 +25,18 @@ export interface StoredSeries {
 
 /** How to stream a file by series. */
 export interface StreamOptions extends ReadOptions {
-  /** Columns that tell series apart. */
+  /** Columns that identify a series. */
   readonly by: string | readonly string[];
-  /** Most memory that the database engine may use before it sorts on disk; default "256MB". */
+  /** Memory that the database engine may use before it sorts on disk. Default "256MB". */
   readonly memory?: string;
 }
 
 /**
- * Reads a file series by series, whatever their order in it, holding one series at a time. Rows of a series come
- * in the order of the file.
+ * Streams a file series by series, whatever their order in it, with one series in memory at a time. Rows of a series
+ * keep the order of the file.
  *
- * @throws {ModelError} `not-streamable` for a workbook, JSON, or a text file whose cells must be looked at
- *   (write it as Parquet first); `no-such-column`.
+ * @throws {ModelError} `not-streamable` for a workbook, JSON, or a text file that has to be read cell by
+ *   cell (write it as Parquet first); `no-such-column`.
  */
 export async function* streamSeries(path: string, options: StreamOptions): AsyncGenerator<StoredSeries> {
   const { DuckDBInstance } = await import("@duckdb/node-api");
@@ -63,17 +63,17 @@ async function relationOfFile(
   options: StreamOptions,
 ): Promise<Relation> {
   const full = resolve(path);
-  const format = (await signatureOf(full)) ?? options.format ?? formatOfEnding(path);
-  if (format === "parquet") return relationOf(connection, `read_parquet(${quoted(full)})`);
+  const format = (await formatOfSignature(full)) ?? options.format ?? formatOfExtension(path);
+  if (format === "parquet") return relationOf(connection, `read_parquet(${sqlString(full)})`);
   if (format === "duckdb") {
-    await connection.run(`ATTACH ${quoted(full)} AS streamed (READ_ONLY)`);
-    return relationOf(connection, `streamed.main.${identifier(options.table ?? "record")}`);
+    await connection.run(`ATTACH ${sqlString(full)} AS streamed (READ_ONLY)`);
+    return relationOf(connection, `streamed.main.${sqlIdentifier(options.table ?? "record")}`);
   }
   const head = format === "csv" || format === "tsv" ? await textHead(full) : undefined;
   const delimiter =
-    options.delimiter ?? (format === "tsv" ? "\t" : head === undefined ? "," : delimiterOf(head, path));
-  const relation = head === undefined ? undefined : plainCsv(full, head, delimiter, options);
-  if (relation === undefined) throw notStreamable(path);
+    options.delimiter ?? (format === "tsv" ? "\t" : head === undefined ? "," : detectDelimiter(head, path));
+  const relation = head === undefined ? undefined : plainCsvRelation(full, head, delimiter, options);
+  if (relation === undefined) throw notStreamableError(path);
   return relation;
 }
 
@@ -84,7 +84,7 @@ async function* seriesOf(
 ): AsyncGenerator<StoredSeries> {
   const keys = by.map((name) => {
     const at = names.indexOf(name);
-    if (at < 0) throw noSuchColumn(name, names, nearestNames(name, names));
+    if (at < 0) throw columnNotFoundError(name, names, nearestNames(name, names));
     return at;
   });
   const columns = selected.map((sql, i) => `${sql} AS s${i}`).join(", ");
@@ -95,27 +95,27 @@ async function* seriesOf(
   for (;;) {
     const chunk = await result.fetchChunk();
     if (chunk === null || chunk.rowCount === 0) break;
-    for (const [start, end] of stretches(chunk, keys)) {
+    for (const [start, end] of runs(chunk, keys)) {
       const key = keyAt(chunk, keys, start);
       if (current.rows.length > 0 && key !== current.key) {
-        yield finished(current, names);
+        yield storedSeries(current, names);
         current = emptySeries(kinds.length);
       }
       current.key = key;
-      take(chunk, start, end, current, keys);
+      appendRows(chunk, start, end, current, keys);
     }
   }
-  if (current.rows.length > 0) yield finished(current, names);
+  if (current.rows.length > 0) yield storedSeries(current, names);
 }
 
-interface GatheredSeries {
+interface SeriesBuilder {
   key: string;
   name: string;
   readonly columns: unknown[][];
   readonly rows: number[];
 }
 
-function emptySeries(columns: number): GatheredSeries {
+function emptySeries(columns: number): SeriesBuilder {
   return { key: "", name: "", columns: Array.from({ length: columns }, () => []), rows: [] };
 }
 
@@ -123,8 +123,8 @@ function keyAt(chunk: DuckDBDataChunk, keys: readonly number[], row: number): st
   return JSON.stringify(keys.map((at) => String(chunk.getColumnVector(at).getItem(row))));
 }
 
-/** Stretches of rows of one series within a piece: where they begin and end. */
-function stretches(chunk: DuckDBDataChunk, keys: readonly number[]): readonly (readonly [number, number])[] {
+/** Runs of rows of one series within a chunk, as start and end. */
+function runs(chunk: DuckDBDataChunk, keys: readonly number[]): readonly (readonly [number, number])[] {
   const found: [number, number][] = [];
   const vectors = keys.map((at) => chunk.getColumnVector(at));
   const rows = chunk.rowCount;
@@ -137,23 +137,23 @@ function stretches(chunk: DuckDBDataChunk, keys: readonly number[]): readonly (r
   return found;
 }
 
-function take(
+function appendRows(
   chunk: DuckDBDataChunk,
   start: number,
   end: number,
-  series: GatheredSeries,
+  series: SeriesBuilder,
   keys: readonly number[],
 ): void {
   series.columns.forEach((column, at) => {
     const vector = chunk.getColumnVector(at);
     for (let row = start; row < end; row++) column.push(vector.getItem(row));
   });
-  const places = chunk.getColumnVector(series.columns.length);
-  for (let row = start; row < end; row++) series.rows.push(Number(places.getItem(row)));
+  const positions = chunk.getColumnVector(series.columns.length);
+  for (let row = start; row < end; row++) series.rows.push(Number(positions.getItem(row)));
   series.name = keys.map((at) => String(chunk.getColumnVector(at).getItem(start))).join(", ");
 }
 
-function finished(series: GatheredSeries, names: readonly string[]): StoredSeries {
+function storedSeries(series: SeriesBuilder, names: readonly string[]): StoredSeries {
   const table = { names, columns: series.columns.map(packed) };
   return { name: series.name, table, rows: Int32Array.from(series.rows) };
 }

@@ -1,9 +1,9 @@
 import { open } from "node:fs/promises";
 
-/** So much of a text file is looked at before it is read. */
+/** Bytes of a text file that are inspected before it is read. */
 export const headBytes: number = 1 << 18;
 
-/** The beginning of a text file, cut at a line's end; undefined where it is not UTF-8 text. */
+/** The beginning of a text file, cut at the end of a line; undefined if it is not UTF-8 text. */
 export async function textHead(path: string): Promise<string | undefined> {
   const file = await open(path);
   try {

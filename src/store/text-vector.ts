@@ -1,18 +1,18 @@
 import type { DuckDBVector } from "@duckdb/node-api";
 
-/** Bytes of a text that stand in its own cell of the engine's vector, behind its length; and words of a cell. */
+/** Bytes of a short string stored inline in the engine's vector, after its length; and 32-bit words per cell. */
 const inlineBytes = 12;
 const cellWords = 4;
 
 /**
- * Adds the texts of one vector of the engine to a list; null where there is none.
+ * Appends the strings of one vector of the engine to a list; null where missing.
  *
- * The reader of the engine's package decodes every text through a general decoder. Here a text equal to the one
- * before it is taken over, and a short plain one is cut from the vector's bytes; what is longer, or not plain
- * ASCII, or not laid out as expected, goes through that reader.
+ * The package of the engine sends every string through a general decoder. Here a string equal to the previous one is
+ * reused, and a short ASCII string is sliced from the bytes of the vector; longer strings, other letters and an
+ * unexpected layout go through the package.
  */
-export function addTexts(vector: DuckDBVector, rows: number, texts: (string | null)[]): void {
-  // Not in the package's types: present in the pinned version, and done without where it is not.
+export function appendTexts(vector: DuckDBVector, rows: number, texts: (string | null)[]): void {
+  // Not in the types of the package: present in the pinned version, with a fallback where it is not.
   const { dataView, validity } = vector as unknown as {
     dataView?: DataView;
     validity?: { data?: BigUint64Array | null };
@@ -21,13 +21,13 @@ export function addTexts(vector: DuckDBVector, rows: number, texts: (string | nu
     dataView === undefined ||
     dataView.byteOffset % 4 !== 0 ||
     validity === undefined ||
-    !allPresent(validity.data, rows)
+    !noneMissing(validity.data, rows)
   )
-    addOneByOne(vector, rows, texts);
-  else addPlain(vector, dataView, rows, texts);
+    appendOneByOne(vector, rows, texts);
+  else appendAscii(vector, dataView, rows, texts);
 }
 
-function addPlain(vector: DuckDBVector, view: DataView, rows: number, texts: (string | null)[]): void {
+function appendAscii(vector: DuckDBVector, view: DataView, rows: number, texts: (string | null)[]): void {
   const bytes = Buffer.from(view.buffer, view.byteOffset, view.byteLength);
   const words = new Int32Array(view.buffer, view.byteOffset, rows * cellWords);
   let before = -1;
@@ -36,7 +36,7 @@ function addPlain(vector: DuckDBVector, view: DataView, rows: number, texts: (st
     if (before >= 0 && sameCell(words, at, before)) texts.push(texts[texts.length - 1]!);
     else {
       const length = words[at]!;
-      const plain = length <= inlineBytes && isPlain(words, at);
+      const plain = length <= inlineBytes && isAscii(words, at);
       const start = at * 4 + 4;
       texts.push(plain ? bytes.toString("latin1", start, start + length) : (vector.getItem(row) as string));
       before = plain ? at : -1;
@@ -44,8 +44,8 @@ function addPlain(vector: DuckDBVector, view: DataView, rows: number, texts: (st
   }
 }
 
-/** Whether every row has a value: no mask, or one with every bit of a row set. */
-function allPresent(mask: BigUint64Array | null | undefined, rows: number): boolean {
+/** Whether every row has a value: no validity mask, or one with every bit set. */
+function noneMissing(mask: BigUint64Array | null | undefined, rows: number): boolean {
   if (!mask) return true;
   const whole = Math.floor(rows / 64);
   const rest = (1n << BigInt(rows % 64)) - 1n;
@@ -64,11 +64,11 @@ function sameCell(words: Int32Array, a: number, b: number): boolean {
   );
 }
 
-/** No byte above 127: such bytes are the same text in every encoding met here. */
-function isPlain(words: Int32Array, at: number): boolean {
+/** No byte above 127. */
+function isAscii(words: Int32Array, at: number): boolean {
   return ((words[at + 1]! | words[at + 2]! | words[at + 3]!) & 0x80808080) === 0;
 }
 
-function addOneByOne(vector: DuckDBVector, rows: number, texts: (string | null)[]): void {
+function appendOneByOne(vector: DuckDBVector, rows: number, texts: (string | null)[]): void {
   for (let row = 0; row < rows; row++) texts.push(vector.getItem(row) as string | null);
 }

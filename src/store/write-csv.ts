@@ -6,7 +6,7 @@ import type { NamedTable, WriteOptions } from "./write-options.js";
 
 const rowsAtOnce = 10_000;
 
-/** Writes delimited text: UTF-8, every double in the fewest digits that give it back, a missing cell as nothing. */
+/** Writes delimited text: UTF-8, every double in the shortest form that reads back exactly, a missing cell as nothing. */
 export async function writeCsv(
   tables: readonly NamedTable[],
   path: string,
@@ -29,7 +29,7 @@ function* pieces(table: ColumnTable, delimiter: string): Generator<string> {
   }
 }
 
-/** An empty text is quoted, so that it is told from a missing cell. */
+/** An empty string is quoted, to distinguish it from a missing cell. */
 function cellText(cell: unknown, delimiter: string): string {
   if (cell === null || cell === undefined || Number.isNaN(cell)) return "";
   if (typeof cell === "number") return numberText(cell);
@@ -38,7 +38,7 @@ function cellText(cell: unknown, delimiter: string): string {
   return plain ? text : `"${text.replaceAll('"', '""')}"`;
 }
 
-/** The fewest digits that give the same double back; sixteen digits and more with an exponent, so as not to be a code. */
+/** The shortest digits that read back exactly; integers of sixteen digits and more with an exponent, so that they are not read as codes. */
 export function numberText(value: number): string {
   if (Object.is(value, -0)) return "-0";
   return Number.isInteger(value) && Math.abs(value) >= 1e15 ? value.toExponential() : String(value);

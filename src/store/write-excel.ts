@@ -1,14 +1,15 @@
 import { writeFile } from "node:fs/promises";
 import type { CellObject, WorkSheet } from "xlsx";
+import { count } from "../../kernel-helpers/wording/index.js";
 import { type ColumnTable, rowCount } from "../record/index.js";
-import { notWritable } from "./refusals.js";
+import { notWritableError } from "./errors.js";
 import { workbooks } from "./workbooks.js";
 import type { NamedTable, WriteOptions } from "./write-options.js";
 
-/** The most rows and the longest text that a sheet holds (ECMA-376 leaves it to programs; these are the usual limits). */
+/** Largest number of rows and longest text of a sheet (ECMA-376 leaves it to programs; these are the usual limits). */
 const limits = { rows: 1_048_575, text: 32_767 };
 
-/** Writes a workbook with one sheet a table. A text is written as text, whatever it begins with. */
+/** Writes a workbook with one sheet per table. Text is written as text, even if it starts like a formula. */
 export async function writeExcel(
   tables: readonly NamedTable[],
   path: string,
@@ -17,9 +18,9 @@ export async function writeExcel(
 ): Promise<void> {
   const { utils, write } = workbooks();
   const book = utils.book_new();
-  const taken = new Set<string>();
+  const used = new Set<string>();
   for (const { name, table } of tables)
-    utils.book_append_sheet(book, sheetOf(table, shownPath), sheetName(name, taken));
+    utils.book_append_sheet(book, sheetOf(table, shownPath), sheetName(name, used));
   await writeFile(path, write(book, { type: "buffer", bookType: "xlsx", compression: true }) as Buffer);
 }
 
@@ -27,10 +28,10 @@ function sheetOf(table: ColumnTable, path: string): WorkSheet {
   const { utils } = workbooks();
   const rows = rowCount(table);
   if (rows > limits.rows)
-    throw notWritable(
+    throw notWritableError(
       path,
-      `a sheet holds ${limits.rows} rows and the record has ${rows}`,
-      "Write Parquet or CSV.",
+      `a sheet has room for ${count(limits.rows)} rows, and the record has ${count(rows)}`,
+      "Use Parquet (.parquet) or CSV (.csv).",
     );
   const sheet: WorkSheet = {};
   table.names.forEach((name, c) => {
@@ -53,23 +54,23 @@ function cellOf(cell: unknown, path: string, row: number, column: string): CellO
   if (typeof cell === "number" && Number.isFinite(cell)) return { t: "n", v: cell };
   const text = cell instanceof Date ? cell.toISOString() : String(cell);
   if (text.length > limits.text)
-    throw notWritable(
+    throw notWritableError(
       path,
-      `row ${row + 1}, ${column} is longer than a sheet's cell holds`,
-      "Write Parquet or CSV.",
+      `row ${row + 1}, ${column} is longer than ${count(limits.text)} characters, the limit of a cell`,
+      "Use Parquet (.parquet) or CSV (.csv).",
     );
   return { t: "s", v: text };
 }
 
-/** At most 31 characters, none of those that sheet names forbid, and no two alike. */
-function sheetName(name: string, taken: Set<string>): string {
+/** At most 31 characters, no forbidden ones, and unique. */
+function sheetName(name: string, used: Set<string>): string {
   const plain =
     name
       .replace(/[[\]:*?/\\]/g, " ")
       .trim()
       .slice(0, 31) || "record";
-  let free = plain;
-  for (let n = 2; taken.has(free.toLowerCase()); n++) free = `${plain.slice(0, 27)} (${n})`;
-  taken.add(free.toLowerCase());
-  return free;
+  let unique = plain;
+  for (let n = 2; used.has(unique.toLowerCase()); n++) unique = `${plain.slice(0, 27)} (${n})`;
+  used.add(unique.toLowerCase());
+  return unique;
 }

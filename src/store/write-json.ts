@@ -1,10 +1,10 @@
 import { writeFile } from "node:fs/promises";
 import { rowCount } from "../record/index.js";
-import { notWritable } from "./refusals.js";
+import { notWritableError } from "./errors.js";
 import { numberText } from "./write-csv.js";
 import type { NamedTable, WriteOptions } from "./write-options.js";
 
-/** Writes JSON: an array of row objects, one a line; a missing cell is null. */
+/** Writes JSON: an array of row objects, one per line; a missing cell is null. */
 export async function writeJson(
   tables: readonly NamedTable[],
   path: string,
@@ -13,7 +13,7 @@ export async function writeJson(
 ): Promise<void> {
   const { table } = tables[0]!;
   const rows = Array.from({ length: rowCount(table) }, (_, row) => {
-    // Written by hand, because as a key of an object "__proto__" would not be a column.
+    // Built by hand, because "__proto__" would be lost as a key of an object.
     const cells = table.columns.map(
       (column, i) =>
         `${JSON.stringify(table.names[i])}: ${cellJson(column[row], shownPath, row, table.names[i]!)}`,
@@ -27,10 +27,10 @@ function cellJson(cell: unknown, path: string, row: number, column: string): str
   if (cell === null || cell === undefined || Number.isNaN(cell)) return "null";
   if (typeof cell !== "number") return JSON.stringify(typeof cell === "bigint" ? String(cell) : cell);
   if (!Number.isFinite(cell))
-    throw notWritable(
+    throw notWritableError(
       path,
-      `JSON has no infinite number (row ${row + 1}, ${column})`,
-      "Write Parquet or CSV, or correct the value.",
+      `JSON cannot represent infinity (row ${row + 1}, ${column})`,
+      "Use Parquet (.parquet) or CSV (.csv), or correct the value.",
     );
   return numberText(cell);
 }

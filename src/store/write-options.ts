@@ -3,21 +3,21 @@ import type { Format } from "./read-options.js";
 
 /** How to write a file. */
 export interface WriteOptions {
-  /** Default: by the ending of the file's name. */
+  /** Default: by the file extension. */
   readonly format?: Format;
-  /** What separates the cells of a text file; default "," (a tab for .tsv). */
+  /** Delimiter of a text file. Default "," ("\t" for .tsv). */
   readonly delimiter?: string;
-  /** Name of the sheet, or of the table in a database file; default "record". */
+  /** Name of the sheet, or of the table in a database file. Default "record". */
   readonly table?: string;
 }
 
-/** A table with the name of its sheet or of its place in a database file. */
+/** A table with the name of its sheet or database table. */
 export interface NamedTable {
   readonly name: string;
   readonly table: ColumnTable;
 }
 
-/** Writes to `path`, which nobody else reads yet; messages name the file as the analyst wrote it. */
+/** Writes to `path`, a temporary file; messages name the file by `shownPath`. */
 export type Writer = (
   tables: readonly NamedTable[],
   path: string,

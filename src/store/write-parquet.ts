@@ -1,4 +1,4 @@
-import { quoted, withDatabase } from "./database.js";
+import { sqlString, withDatabase } from "./database.js";
 import type { NamedTable, WriteOptions } from "./write-options.js";
 import { writeRelation } from "./write-relation.js";
 
@@ -15,7 +15,7 @@ export async function writeParquet(
   await withDatabase(async (connection) => {
     try {
       await writeRelation(connection, name, tables[0]!.table, shownPath);
-      await connection.run(`COPY ${name} TO ${quoted(path)} (FORMAT parquet)`);
+      await connection.run(`COPY ${name} TO ${sqlString(path)} (FORMAT parquet)`);
     } finally {
       await connection.run(`DROP TABLE IF EXISTS ${name}`);
     }

@@ -1,30 +1,32 @@
 import type { DuckDBConnection } from "@duckdb/node-api";
 import { type ColumnTable, rowCount } from "../record/index.js";
-import { identifier } from "./database.js";
-import { notWritable } from "./refusals.js";
+import { sqlIdentifier } from "./database.js";
+import { notWritableError } from "./errors.js";
 
 const rowsAtOnce = 2048;
 
-/** Makes a table of the database engine with every cell of a table of columns. */
+/** Creates a table of the database engine from a table of columns. */
 export async function writeRelation(
   connection: DuckDBConnection,
   name: string,
   table: ColumnTable,
   shownPath: string,
 ): Promise<void> {
-  refuseNames(table.names, shownPath);
+  checkColumnNames(table.names, shownPath);
   const { DuckDBDataChunk, BOOLEAN, DOUBLE, VARCHAR } = await import("@duckdb/node-api");
   const kinds = table.columns.map(kindOf);
   const types = kinds.map((kind) => ({ number: DOUBLE, boolean: BOOLEAN, text: VARCHAR })[kind]);
-  const columns = table.names.map((column, i) => `${identifier(column)} ${types[i]}`);
-  await connection.run(`CREATE OR REPLACE TABLE ${identifier(name)} (${columns.join(", ")})`);
+  const columns = table.names.map((column, i) => `${sqlIdentifier(column)} ${types[i]}`);
+  await connection.run(`CREATE OR REPLACE TABLE ${sqlIdentifier(name)} (${columns.join(", ")})`);
   const appender = await connection.createAppender(name);
   const rows = rowCount(table);
   for (let from = 0; from < rows; from += rowsAtOnce) {
     const to = Math.min(rows, from + rowsAtOnce);
     const chunk = DuckDBDataChunk.create(types, to - from);
     chunk.setColumns(
-      table.columns.map((column, i) => Array.from(column.slice(from, to), (cell) => stored(cell, kinds[i]!))),
+      table.columns.map((column, i) =>
+        Array.from(column.slice(from, to), (cell) => databaseValue(cell, kinds[i]!)),
+      ),
     );
     appender.appendDataChunk(chunk);
   }
@@ -45,24 +47,22 @@ function isMissing(cell: unknown): boolean {
   return cell === null || cell === undefined || Number.isNaN(cell);
 }
 
-function stored(cell: unknown, kind: Kind): number | boolean | string | null {
+function databaseValue(cell: unknown, kind: Kind): number | boolean | string | null {
   if (isMissing(cell)) return null;
   if (kind !== "text") return cell as number | boolean;
   return cell instanceof Date ? cell.toISOString() : String(cell);
 }
 
-/** The engine's names do not tell capital letters from small ones. */
-function refuseNames(names: readonly string[], path: string): void {
-  const taken = new Map<string, string>();
+/** Names in the engine are case-insensitive. */
+function checkColumnNames(names: readonly string[], path: string): void {
+  const used = new Map<string, string>();
   for (const name of names) {
-    const before = taken.get(name.toLowerCase());
+    const before = used.get(name.toLowerCase());
     if (name === "" || before !== undefined) {
       const reason =
-        name === ""
-          ? "a column has no name"
-          : `the columns "${before}" and "${name}" differ in no letter but its case`;
-      throw notWritable(path, reason, "Rename the column, or write CSV or JSON.");
+        name === "" ? "a column has no name" : `the columns "${before}" and "${name}" differ only in case`;
+      throw notWritableError(path, reason, "Rename the column, or use CSV or JSON.");
     }
-    taken.set(name.toLowerCase(), name);
+    used.set(name.toLowerCase(), name);
   }
 }

@@ -1,10 +1,10 @@
 import { randomUUID } from "node:crypto";
 import { copyFile, rename, rm, stat } from "node:fs/promises";
 import { basename, dirname, join, resolve } from "node:path";
-import { formatOfEnding } from "./format-of-ending.js";
-import { holdsSeveral } from "./holds-several.js";
+import { notWritableError, unknownFormatError } from "./errors.js";
+import { formatOfExtension } from "./file-extension.js";
 import type { Format } from "./read-options.js";
-import { formatUnknown, notWritable } from "./refusals.js";
+import { holdsSeveralTables } from "./several-tables.js";
 import { writeCsv } from "./write-csv.js";
 import { writeDuckdb } from "./write-duckdb.js";
 import { writeExcel } from "./write-excel.js";
@@ -23,8 +23,8 @@ const writers: Readonly<Record<Format, Writer>> = {
 };
 
 /**
- * Writes tables to a file, whole or not at all: what stood there before is replaced only by a finished file.
- * In a database file other tables stay as they were.
+ * Writes tables to a file atomically: the previous file is replaced only by a complete one. Other tables of a database
+ * file are kept.
  *
  * @throws {ModelError} `format-unknown` | `not-writable`.
  */
@@ -33,24 +33,24 @@ export async function writeTables(
   path: string,
   options: WriteOptions = {},
 ): Promise<void> {
-  const format = options.format ?? formatOfEnding(path);
-  if (format === undefined) throw formatUnknown(path, Object.keys(writers));
-  if (tables.length > 1 && !holdsSeveral(path, format))
-    throw notWritable(
+  const format = options.format ?? formatOfExtension(path);
+  if (format === undefined) throw unknownFormatError(path, Object.keys(writers));
+  if (tables.length > 1 && !holdsSeveralTables(path, format))
+    throw notWritableError(
       path,
-      `there are ${tables.length} tables and the file holds one`,
-      "Write a workbook (.xlsx), or one table of them.",
+      `there are ${tables.length} tables, and this format holds one`,
+      "Use an Excel workbook (.xlsx), or write one of the tables.",
     );
   const full = resolve(path);
-  const draft = join(dirname(full), `.${basename(full)}.${randomUUID().slice(0, 8)}`);
+  const temporary = join(dirname(full), `.${basename(full)}.${randomUUID().slice(0, 8)}`);
   try {
-    if (format === "duckdb" && (await exists(full))) await copyFile(full, draft);
-    await writers[format](tables, draft, path, options);
-    await rename(draft, full);
+    if (format === "duckdb" && (await exists(full))) await copyFile(full, temporary);
+    await writers[format](tables, temporary, path, options);
+    await rename(temporary, full);
   } catch (cause) {
-    await rm(draft, { force: true });
+    await rm(temporary, { force: true });
     throw (cause as { code?: string }).code === "ENOENT"
-      ? notWritable(path, "its folder does not exist", "Make the folder first, or write elsewhere.")
+      ? notWritableError(path, "its folder does not exist", "Create the folder, or choose another path.")
       : cause;
   }
 }

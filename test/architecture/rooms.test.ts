@@ -22,6 +22,9 @@ const planted: Readonly<Record<string, string>> = {
   "src/record/index.ts": 'import { first } from "./first.js";\nexport const second: number = first;',
   "src/record/first.ts": 'import { second } from "./index.js";\nexport const first: number = second;',
   "kernel-helpers/index.ts": 'import { c } from "../src/rule/c.js";\nexport const h: number = c;',
+  "kernel-helpers/wording/index.ts": 'import { h } from "../index.js";\nexport const words: number = h;',
+  "kernel-helpers/wording/list.ts": "export const list: number = 1;",
+  "kernel-helpers/lists.ts": 'import { list } from "./wording/list.js";\nexport const l: number = list;',
   "kernel-helpers/drives.ts":
     'import { work } from "../src/casework/index.js";\nexport const w: number = work;',
   "tsconfig.json": '{ "compilerOptions": { "module": "node20", "target": "es2022" } }',
@@ -55,6 +58,8 @@ test.each([
   "a-room-is-entered-through-its-index",
   "helpers-enter-rooms-through-their-index",
   "helpers-do-not-drive-the-kernel",
+  "wording-imports-nothing-else",
+  "wording-is-entered-through-its-index",
   "pure-rooms-touch-no-node-built-in",
 ])("the import rule %s is seen to fail on a planted violation", (rule) => {
   expect([...broken]).toContain(rule);

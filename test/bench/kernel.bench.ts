@@ -7,7 +7,7 @@ import { mkdtempSync, rmSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { bench } from "vitest";
-import { converse } from "../../src/casework/client/conversation.js";
+import { startKernelSession } from "../../src/casework/client/kernel-session.js";
 import { isThere } from "../kernel/needed-program.js";
 
 const rounds = Number(process.env["PERIODWISE_BENCH_ROUNDS"] ?? 5);
@@ -32,7 +32,7 @@ const theirs: Subject = {
 /** Milliseconds: until the kernel answers, until its first result, and of a warm cell (median). */
 async function measured({ command, cell }: Subject, folder: string): Promise<readonly number[]> {
   const start = performance.now();
-  const conversation = await converse(command, folder);
+  const conversation = await startKernelSession(command, folder);
   const answered = performance.now() - start;
   const run = (code: string) =>
     conversation.request("execute_request", { code, silent: false, store_history: true, allow_stdin: false });

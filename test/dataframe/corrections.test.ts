@@ -60,7 +60,7 @@ for (const ending of ["csv", "tsv", "json", "parquet", "xlsx", "duckdb"]) {
     const path = join(folder, `stock.${ending}`);
     await writeRecord(checked(), path);
     const several = ending === "xlsx" || ending === "duckdb";
-    if (several) await expect(readRecord(path)).rejects.toThrow("holds several tables");
+    if (several) await expect(readRecord(path)).rejects.toThrow("has several tables");
     const back = await readRecord(path, several ? { table: "record" } : {});
     expect(back.columns).toEqual(["week", "Anzahl", "Anzahl (corrected)", "left out"]);
     expect(back.column("Anzahl").values).toEqual([170, -167, 160, 999]);

@@ -110,7 +110,7 @@ describe("frames out", () => {
     await writeRecord(fit(recurrence("ΔN = r*N*(1 - N/K)"), counts, { errors: "observation" }), path);
     const estimates = await readRecord(path, { table: "estimates" });
     expect(estimates.column("name").values).toEqual(expect.arrayContaining(["r", "K"]));
-    await expect(readRecord(path)).rejects.toThrow('several tables: "estimates", "points", "summary"');
+    await expect(readRecord(path)).rejects.toThrow('several tables: "estimates", "points" and "summary"');
     rmSync(folder, { recursive: true, force: true });
   });
 

@@ -121,9 +121,9 @@ test("nothing is read from the network", async () => {
   );
 });
 
-test("the frame library is loaded when it is first used, and not by what only imports the commands", () => {
+test("the frame library is loaded on first use, not by importing the functions", () => {
   const program = `
-    require(${JSON.stringify(join(import.meta.dirname, "..", "..", "dist", "kernel-helpers", "commands", "records.js"))});
+    require(${JSON.stringify(join(import.meta.dirname, "..", "..", "dist", "kernel-helpers", "functions", "records.js"))});
     const loaded = () => Object.keys(require.cache).filter((path) => /danfojs-node|node-bindings|[\\\\/]xlsx[\\\\/]/.test(path)).length;
     console.log(loaded());`;
   expect(spawnSync(process.execPath, ["-e", program], { encoding: "utf8" }).stdout.trim()).toBe("0");

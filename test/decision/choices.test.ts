@@ -69,7 +69,7 @@ test("the elasticities of the time to a density are those of its closed form", (
     start: { r: 0.5 },
   });
   const fitted = fit(rule, cultureRecord(), { errors: "observation", distribution: "lognormal" });
-  const found = sensitivity(fitted, { periods: 10, answer: { time: "N", value: 0.8, direction: "rising" } });
+  const found = sensitivity(fitted, { periods: 10, answer: { time: "N", risesTo: 0.8 } });
   const elasticity = (name: string): number => found.rows.find((row) => row.name === name)!.elasticity;
   expect(elasticity("K")).toBeCloseTo(-0.248, 3);
   expect(elasticity("N[0]")).toBeCloseTo(-0.229, 3);
@@ -91,7 +91,7 @@ test("a table of choices shows time, level and risk of each setting, with the Mo
     periods: 30,
     noise: { stock: { distribution: "normal", sd: 3 } },
     answers: {
-      "runs out": { risk: "stock", value: 0, direction: "falling" },
+      "runs out": { probability: "stock", fallsTo: 0 },
       "on average": { average: "stock" },
       lowest: { lowest: "stock", from: 2, to: 10 },
     },
@@ -126,7 +126,7 @@ test.each([
     periods: 30,
     noise: { B: { distribution: "lognormal", sd: 0.25, centre: "mean" } },
     paths: 60_000,
-    answers: { risk: { risk: "B", value: 200, direction: "falling" }, yield: { average: "catch" } },
+    answers: { risk: { probability: "B", fallsTo: 200 }, yield: { average: "catch" } },
   });
   const [{ answers, errors }] = found.rows as [(typeof found.rows)[number]];
   expect(Math.abs(answers["risk"]! - risk)).toBeLessThan(0.004 + 2 * errors["risk"]!);

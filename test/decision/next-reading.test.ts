@@ -120,7 +120,7 @@ test("a reading without a purpose or a time is refused", () => {
     "Say what the reading is for: several rival fits to tell apart, or one fit with the { answer } to be narrowed.",
   );
   expect(() => nextReading(fitted, { periods: 3, answer: { parameter: "R" }, values: [2] })).toThrow(
-    "No reading can be taken at the times asked for; the rules know times from 6 to 9, and with errors in the process only those after the record.",
+    "No reading can be taken at the times asked for; the rules know times from day 6 to day 9, and with errors in the process only those after the record.",
   );
   expect(
     nextReading(fitted, { periods: 3, answer: { parameter: "R" } }).choices.map((each) => each.time),

@@ -34,7 +34,7 @@ describe("a loan", () => {
       vary: "payment",
       range: [900, 3000],
       multiple: 0.01,
-      until: { time: "owed", value: 0, direction: "falling", atMost: 300 },
+      until: { time: "owed", fallsTo: 0, atMost: 300 },
     });
     expect(found.solutions[0]!.value).toBe(Math.ceil(level * 100) / 100);
     expect(found.solutions[0]!.achieved).toBe(300);
@@ -88,14 +88,14 @@ test("the stock that keeps the risk of running out at 2% is the quantile of one 
     vary: "stock[0]",
     range: [20, 100],
     multiple: 1,
-    until: { risk: "stock", value: 0, direction: "falling", atMost: 0.02 },
+    until: { probability: "stock", fallsTo: 0, atMost: 0.02 },
   });
   const exact = 40 + normalQuantile(0.98) * 5;
   expect(found.solutions[0]!.value).toBe(Math.ceil(exact));
   expect(Math.abs(found.solutions[0]!.exact - exact)).toBeLessThan(0.16 + 0.02);
   expect(found.solutions[0]!.achieved).toBeLessThanOrEqual(0.02);
   expect(found.sentence).toMatch(
-    /^With stock\[0\] at or above 51 pieces, the risk that stock falls to 0 pieces is 1\.\d+% \(Monte-Carlo error 0\.0\d%\), provided the rule stock\[t\+1\] = stock - demand and its parameters hold\.$/,
+    /^With stock\[0\] at or above 51 pieces, the probability that stock falls to 0 pieces is 1\.\d+% \(Monte-Carlo error 0\.0\d%\), provided the rule stock\[t\+1\] = stock - demand and its parameters hold\.$/,
   );
 });
 
@@ -107,7 +107,7 @@ test("a fit's answer has an interval, and solving it back gives the target", () 
   const found = solveFor(fitted, {
     periods: 20,
     vary: "N[0]",
-    until: { time: "N", value: 0.8, direction: "rising", is: 6 },
+    until: { time: "N", risesTo: 0.8, is: 6 },
     seed: 4,
   });
   const [solution] = found.solutions;
@@ -119,9 +119,7 @@ test("a fit's answer has an interval, and solving it back gives the target", () 
   expect(found.sentence).toMatch(
     /^With N\[0\] at 0\.0\d+ \(95% interval 0\.0\d+ to 0\.0\d+\), N rises to 0\.8 at hour 6, provided it goes on as in the record of 21 values to hour 10, by the rule N\[t\+1\] = R\*N\/\(1 \+ \(R - 1\)\*N\/K\)\.$/,
   );
-  expect(
-    timeToReach(forecast(fitted, { periods: 20 }), { value: 0.8, direction: "rising" }).groups[0]!.time,
-  ).toBeGreaterThan(6);
+  expect(timeToReach(forecast(fitted, { periods: 20 }), { risesTo: 0.8 }).groups[0]!.time).toBeGreaterThan(6);
 });
 
 test("what cannot be solved is refused in a whole sentence", () => {
@@ -145,8 +143,8 @@ test("what cannot be solved is refused in a whole sentence", () => {
   expect(ask({ until: { level: "owed", at: 1 } })).toThrow(
     "The target has no value. Say { is }, { atMost } or { atLeast } with a finite number.",
   );
-  expect(ask({ until: { risk: "owed", value: 0, direction: "falling", atMost: 0.1 } })).toThrow(
-    'The risk of owed needs a rule with random change. Give it: noise: { owed: { distribution: "normal", sd: 1 } }, or ask for a time instead.',
+  expect(ask({ until: { probability: "owed", fallsTo: 0, atMost: 0.1 } })).toThrow(
+    'The probability that owed gets to a level needs a rule with random change. Give it: noise: { owed: { distribution: "normal", sd: 1 } }, or ask for a time instead.',
   );
   const idle = recurrence("x[t+1] = x + 0*a", { bounds: { a: [0, 5] } });
   const solve = (between: readonly [number, number] | undefined) => () =>

@@ -131,7 +131,7 @@ test("where no closed form is known it is said so", () => {
   expect(() =>
     closedForm(rules.ricker(), { parameters: { r: 1, K: 10 }, initial: { N: 1 } }),
   ).toThrowErrorMatchingInlineSnapshot(
-    `[ModelError: Ricker rule has no closed form that is known here for these parameters. Step it with path; equilibria and cycles say where it goes in the long run.]`,
+    `[ModelError: Ricker has no closed form that is known here for these parameters. Step it with path; equilibria and cycles say where it goes in the long run.]`,
   );
 });
 
@@ -139,6 +139,6 @@ test("parameters outside a named rule's range are refused with the condition", (
   expect(() =>
     closedForm(rules.bevertonHolt(), { parameters: { R: 0.8, K: 10 }, initial: { N: 1 } }),
   ).toThrowErrorMatchingInlineSnapshot(
-    `[ModelError: Beverton-Holt rule: the logistic curve sampled at equal steps means what it says only where R > 1; given were R = 0.8. Choose values inside the range, or write the rule out with recurrence to run it regardless.]`,
+    `[ModelError: Beverton-Holt: the logistic curve sampled at equal steps means what it says only where R > 1; given were R = 0.8. Choose values inside the range, or write the rule out with recurrence to run it regardless.]`,
   );
 });

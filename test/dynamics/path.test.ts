@@ -18,7 +18,7 @@ test("a path that leaves the finite range ends before it, with the period and th
     {
       "kind": "left-finite-range",
       "period": 3,
-      "reason": "The rule leaves the finite range at period 3: log of -3.31656 has no value.",
+      "reason": "The rule leaves the finite range at period 3: log(-3.31656) is undefined.",
     }
   `);
 });
@@ -53,7 +53,7 @@ test("a named rule is not run outside its range", () => {
   expect(() =>
     trajectory(rules.logistic(), { parameters: { r: 2.5, K: 100 }, initial: { N: 150 }, periods: 3 }),
   ).toThrowErrorMatchingInlineSnapshot(
-    `[ModelError: Quadratic rule (discrete logistic) means what it says only where N0 >= 0 and N0 <= K*(1 + 1/r); given were N0 = 150, K = 100, r = 2.5. Choose values inside the range, or write the rule out with recurrence to run it regardless.]`,
+    `[ModelError: Discrete logistic (quadratic map) means what it says only where N0 >= 0 and N0 <= K*(1 + 1/r); given were N0 = 150, K = 100, r = 2.5. Choose values inside the range, or write the rule out with recurrence to run it regardless.]`,
   );
 });
 
@@ -64,7 +64,7 @@ test("inputs must reach as far as the path, and at [t+1] one further", () => {
   expect(() =>
     trajectory(rule, { initial: { owed: 10 }, inputs: { paid: [0, 1, 2, 3] }, periods: 4 }),
   ).toThrowErrorMatchingInlineSnapshot(
-    `[ModelError: The input "paid" is needed at period 4, and the values given reach from period 0 to 3. Give values for every period of the path, or shorten it.]`,
+    `[ModelError: Invalid plan for \`paid\`: it has 4 values and the projection needs 5. Give one for each period, or { usual, from, at }.]`,
   );
 });
 

@@ -39,7 +39,7 @@ async function make(): Promise<Readonly<Record<string, unknown>>> {
   const shelteredFit = fit(sheltered, counts, { errors: "observation" });
   const fitted = shelteredFit;
   const ahead = forecast(fitted, { periods: 12 });
-  const ready = timeToReach(ahead, { value: 600, direction: "rising" });
+  const ready = timeToReach(ahead, { risesTo: 600 });
   return {
     readings,
     counts,

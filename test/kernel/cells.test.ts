@@ -20,26 +20,26 @@ const kernel = await testKernel(folder);
 // Source of what is expected here: the language's own rules (ECMAScript, TypeScript handbook) and the duties of a
 // notebook kernel; common practice where a notebook departs from a module (redeclaring, top-level values).
 describe("a cell", () => {
-  test("shows the value of its last expression, and nothing for undefined", async () => {
+  test("shows the value of its last expression, unless it is undefined", async () => {
     expect((await kernel.run("6 * 7")).value).toBe("42");
     expect((await kernel.run("void 0")).value).toBeUndefined();
   });
 
-  test("may declare again what an earlier cell declared, as anything", async () => {
+  test("can redeclare a name of an earlier cell with another type", async () => {
     await kernel.run("const level = 1;");
     await kernel.run("function level() { return 'a function'; }");
     expect((await kernel.run("class level { size = 3 }\nnew level().size")).value).toBe("3");
     expect((await kernel.run("let level: string = 'text'; level")).value).toBe("'text'");
   });
 
-  test("waits at its top level", async () => {
+  test("has top-level await", async () => {
     expect((await kernel.run("await Promise.resolve(7)")).value).toBe("7");
     const loop =
       "const seen: number[] = [];\nfor await (const n of [1, Promise.resolve(2)]) seen.push(n);\nseen";
     expect((await kernel.run(loop)).value).toBe("[ 1, 2 ]");
   });
 
-  test("is checked strictly", async () => {
+  test("is type-checked strictly", async () => {
     const { reply } = await kernel.run("function f(x) { return x; }");
     expect(reply).toMatchObject({ status: "error", ename: "TypeCheckError" });
     expect(reply["evalue"]).toContain("implicitly has an 'any' type");
@@ -48,7 +48,7 @@ describe("a cell", () => {
     ).toBe("error");
   });
 
-  test("finds the kernel's own packages, typed, in a folder that has none of them", async () => {
+  test("finds the bundled packages, typed, in a folder without them", async () => {
     const typed = await kernel.run(
       'import { recurrence } from "periodwise";\nconst n: number = recurrence("N[t+1] = R*N");',
     );
@@ -59,7 +59,7 @@ describe("a cell", () => {
     expect(frame.reply["evalue"]).toBe("Type 'number[]' is not assignable to type 'number'.");
   });
 
-  test("keeps a value whose type belongs to a package that the folder does not have", async () => {
+  test("keeps a value whose type comes from a package that the folder does not have", async () => {
     const made = await kernel.run(
       'import { readRecord } from "periodwise";\nconst table = await readRecord("record.csv");',
     );
@@ -79,28 +79,28 @@ describe("a cell", () => {
     ).toBe("error");
   });
 
-  test("imports what Node itself has, typed", async () => {
+  test("imports Node modules, typed", async () => {
     expect((await kernel.run('import { basename } from "node:path";\nbasename("a/b.csv")')).value).toBe(
       "'b.csv'",
     );
     expect((await kernel.run("process.pid > 0 && Buffer.from('a').length")).value).toBe("1");
   });
 
-  test("sees a file beside the notebook as it is when the cell runs", async () => {
+  test("sees the current contents of a file beside the notebook", async () => {
     const code = 'import { fee } from "./fees";\nfee(100)';
     expect((await kernel.run(code)).value).toBe("5");
     writeInto(folder, "rates.ts", "export const rate: number = 0.07;\n\n");
     expect((await kernel.run(code)).value).toBe("7.000000000000001");
   });
 
-  test("finds a file that was made after it first failed to", async () => {
+  test("finds a file that was created after a first failed import", async () => {
     const code = 'import { late } from "./late";\nlate';
     expect((await kernel.run(code)).reply["status"]).toBe("error");
     writeInto(folder, "late.ts", 'export const late = "here";\n');
     expect((await kernel.run(code)).value).toBe("'here'");
   });
 
-  test("that fails leaves earlier values, those it declares again included", async () => {
+  test("that fails keeps earlier values, even of names it redeclares", async () => {
     await kernel.run("let kept = 1; const name = 'before';");
     const { reply } = await kernel.run("kept = 2;\nconst name = 5;\nthrow new Error('stop');");
     expect(reply["status"]).toBe("error");
@@ -108,7 +108,7 @@ describe("a cell", () => {
     expect((await kernel.run("name.toUpperCase()")).value).toBe("'BEFORE'");
   });
 
-  test("may have names of its own for what the kernel offers", async () => {
+  test("can use names of its own for the globals of the kernel", async () => {
     expect((await kernel.run("const input = 3; const display = input + 1; display")).value).toBe("4");
   });
 });

@@ -16,7 +16,7 @@ afterAll(async () => {
 /** The next message of a type on any channel. */
 function next(type: string): Promise<Message> {
   return new Promise((resolve) => {
-    const stop = client.hear((_, message) => {
+    const stop = client.listen((_, message) => {
       if (message.header.msg_type !== type) return;
       stop();
       resolve(message);
@@ -29,8 +29,8 @@ function execute(code: string): void {
 }
 
 // Source: Jupyter client documentation, "Messaging in Jupyter", "Messages on the stdin channel".
-describe("a question to the reader", () => {
-  test("is asked, and its answer is the value", async () => {
+describe("input", () => {
+  test("asks the user, and its value is the answer", async () => {
     const [question, reply] = [next("input_request"), next("execute_reply")];
     execute('const lender = await input("Lender? ", { password: true });');
     const asked = await question;
@@ -43,7 +43,7 @@ describe("a question to the reader", () => {
     await done;
   });
 
-  test("that was interrupted does not stand in the way of the next", async () => {
+  test("that was interrupted does not block the next one", async () => {
     const [question, reply] = [next("input_request"), next("execute_reply")];
     execute('await input("never answered")');
     await question;

@@ -21,7 +21,7 @@ describe("the data folder", () => {
 });
 
 describe("install", () => {
-  test("writes a specification with absolute paths, our version and our mark", () => {
+  test("writes a specification with absolute paths, version and marker", () => {
     const data = testFolder();
     const folder = installSpecification(data, kernelCommand);
     expect(folder).toBe(join(data, "kernels", "periodwise"));
@@ -33,7 +33,7 @@ describe("install", () => {
     expect(readFileSync(join(folder, "logo-64x64.png")).subarray(1, 4).toString()).toBe("PNG");
   });
 
-  test("may be repeated, and remove takes all of it back", () => {
+  test("can be repeated, and remove deletes everything", () => {
     const data = testFolder();
     installSpecification(data, kernelCommand);
     const folder = installSpecification(data, kernelCommand);
@@ -42,12 +42,12 @@ describe("install", () => {
     expect(removeSpecification(data)).toBeUndefined();
   });
 
-  test("leaves a folder of that name that somebody else made", () => {
+  test("leaves a folder of that name from another program", () => {
     const data = testFolder();
     const folder = join(data, "kernels", "periodwise");
     mkdirSync(folder, { recursive: true });
     writeFileSync(join(folder, "kernel.json"), '{ "argv": ["other"], "metadata": {} }');
-    const message = `The folder "${folder}" was not made by "periodwise install", so it is left as it is. Remove it yourself if it is no longer wanted.`;
+    const message = `The folder "${folder}" was not created by "periodwise install" and is left unchanged. Remove it yourself if it is no longer needed.`;
     expect(() => installSpecification(data, kernelCommand)).toThrow(message);
     expect(() => removeSpecification(data)).toThrow(message);
     expect(existsSync(folder)).toBe(true);

@@ -49,19 +49,19 @@ describe("an interrupt", () => {
     expect((await kernel.run("kept")).value).toBe(String(before + 1));
   });
 
-  test("ends what a stopped cell had in flight", async () => {
+  test("ends the pending work of a stopped cell", async () => {
     await interrupted("kept = 0;\nfor (;;) { await new Promise(r => setTimeout(r, 5)); kept += 1; }");
     const then = (await kernel.run("await new Promise(r => setTimeout(r, 50)); kept")).value;
     expect((await kernel.run("await new Promise(r => setTimeout(r, 50)); kept")).value).toBe(then);
   });
 
-  test("does nothing to an idle kernel, nor to the cell after it", async () => {
+  test("does not affect an idle kernel or the next cell", async () => {
     kernel.conversation.interrupt();
     await pause(200);
     expect((await kernel.run("let n = 0; for (let i = 0; i < 1000; i++) n += i; n")).value).toBe("499500");
   });
 
-  test("can be asked about by a long computation", async () => {
+  test("can be queried by a long computation", async () => {
     writeInto(folder, "node_modules/busy/asks.js", asking);
     await kernel.run('require("busy/asks").asks()');
     const { value } = await interrupted('const { rounds } = require("busy/asks"); rounds() > 0');
@@ -69,7 +69,7 @@ describe("an interrupt", () => {
     expect((await kernel.run('require("busy/asks").asks()')).value).toBe("false");
   });
 
-  test("gives up the cells that were queued behind", async () => {
+  test("aborts the queued cells", async () => {
     const first = interrupted("for (;;) {}");
     const second = kernel.run("'ran'");
     expect((await first).reply["status"]).toBe("error");

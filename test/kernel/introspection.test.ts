@@ -47,7 +47,7 @@ describe("completion", () => {
     expect(kindOf("sqrt")).toBe("method");
   });
 
-  test("knows what earlier cells declared", async () => {
+  test("offers names declared in earlier cells", async () => {
     expect((await complete("fer|")).kindOf("ferry")).toBe("const");
     expect((await complete("ferry.|")).matches).toEqual(["owed", "rate"]);
   });
@@ -57,7 +57,7 @@ describe("completion", () => {
     expect([cursor_start, cursor_end]).toEqual([21, 23]);
   });
 
-  test("inside the text of a rule offers its names, the functions and the words of rules", async () => {
+  test("inside the text of a rule offers names, functions and reserved words", async () => {
     const names = await complete('recurrence("N[t+1] = N + r*N*(1 - N/K) - exp(|)")');
     expect(names.matches).toEqual(expect.arrayContaining(["N", "r", "K", "sqrt", "min", "t"]));
     expect(names.kindOf("sqrt")).toBe("function");
@@ -66,7 +66,7 @@ describe("completion", () => {
     expect(one.cursor_end - one.cursor_start).toBe(3);
   });
 
-  test("in an empty rule offers the rules of the catalogue, as texts", async () => {
+  test("in an empty rule offers the texts of catalogue rules", async () => {
     expect((await complete('recurrence("|")')).matches.length).toBeGreaterThan(5);
     const { matches, kindOf } = await complete('recurrence("logi|")');
     expect(matches).toHaveLength(1);
@@ -74,20 +74,20 @@ describe("completion", () => {
     expect((await kernel.run(`recurrence("${matches[0]}").states.length`)).value).toBe("1");
   });
 
-  test("inside explain offers the terms of the trade", async () => {
+  test("inside explain offers the terms of the glossary", async () => {
     expect((await complete('explain("fill|")')).matches).toEqual(["fill rate"]);
   });
 });
 
 describe("inspection", () => {
-  test("shows the type and the docstring of our own functions as Markdown", async () => {
+  test("shows type and docstring of the package's functions as Markdown", async () => {
     const told = await about("recurr|ence");
     expect(told).toMatch(/^```typescript\n.*function recurrence\(text: string/s);
     expect(told).toContain("Reads a rule of change from text");
     expect(await about("expl|ain")).toContain("*param* name");
   });
 
-  test("at the higher level adds what it throws and an example", async () => {
+  test("at detail level 1 adds errors and an example", async () => {
     expect(await about("leastSquar|es")).not.toContain("*example*");
     expect(await about("leastSquar|es", 1)).toContain("*example*");
   });
@@ -96,23 +96,23 @@ describe("inspection", () => {
     expect(await about("Math.sqr|t")).toContain("square root");
   });
 
-  test("tells of the function whose brackets the cursor is in", async () => {
+  test("describes the function whose brackets enclose the cursor", async () => {
     expect(await about('recurrence("N[t+1] = N", |')).toContain("recurrence(text: string");
   });
 
-  test("inside the text of a rule tells of its names and functions", async () => {
+  test("inside the text of a rule describes names and functions", async () => {
     expect(await about('recurrence("N[t+1] = mi|n(N, K)")')).toContain("smallest");
-    expect(await about('recurrence("N[t+1] = N + r*N*(1 - N/K|)")')).toContain("constant of this rule");
+    expect(await about('recurrence("N[t+1] = N + r*N*(1 - N/K|)")')).toContain("parameter of this rule");
   });
 
-  test("finds nothing where nothing is", async () => {
+  test("finds nothing in empty text", async () => {
     const reply = await kernel.ask("inspect_request", { code: "   ", cursor_pos: 1, detail_level: 0 });
     expect(reply).toMatchObject({ status: "ok", found: false, data: {} });
   });
 });
 
 describe("the text of a rule", () => {
-  test("with a mistake is refused at its place in the cell, before the cell runs", async () => {
+  test("with an error is rejected at its position in the cell, before the cell runs", async () => {
     const { reply, stdout } = await kernel.run(
       'console.log("ran");\nconst rule = recurrence("N[t+1] = r*N(1 - N/K)");',
     );
@@ -123,14 +123,14 @@ describe("the text of a rule", () => {
     expect(line.slice(caret.indexOf("^"), caret.lastIndexOf("^") + 1)).toContain("N");
   });
 
-  test("is read with the names that the call declares", async () => {
+  test("is checked with the names declared in the call", async () => {
     const good = 'recurrence("owed[t+1] = owed*(1 + rate) - paid[t+1]", { inputs: ["paid"] }).inputs';
     expect((await kernel.run(good)).value).toBe("[ 'paid' ]");
-    const unknown = 'recurrence("N[t+1] = N + r*N*(1 - N/capcity)", { constants: ["r", "capacity"] })';
+    const unknown = 'recurrence("N[t+1] = N + r*N*(1 - N/capcity)", { parameters: ["r", "capacity"] })';
     expect((await kernel.run(unknown)).reply["evalue"]).toContain("capcity");
   });
 
-  test("is left to run where its options are computed", async () => {
+  test("is not checked in advance when its options are computed", async () => {
     const code = 'const inputs = ["paid"];\nrecurrence("owed[t+1] = owed - paid[t+1]", { inputs }).states';
     expect((await kernel.run(code)).value).toBe("[ 'owed' ]");
   });

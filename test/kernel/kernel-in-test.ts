@@ -2,7 +2,7 @@ import { mkdirSync, mkdtempSync, realpathSync, rmSync, writeFileSync } from "nod
 import { tmpdir } from "node:os";
 import { dirname, join } from "node:path";
 import { afterAll } from "vitest";
-import { type Conversation, converse } from "../../src/casework/client/conversation.js";
+import { type KernelSession, startKernelSession } from "../../src/casework/client/kernel-session.js";
 import type { Message } from "../../src/kernel/index.js";
 
 export const root: string = join(import.meta.dirname, "..", "..");
@@ -27,7 +27,7 @@ export interface TestKernel {
   readonly folder: string;
   readonly run: (code: string, options?: object) => Promise<Ran>;
   readonly ask: (type: string, content: object) => Promise<Readonly<Record<string, unknown>>>;
-  readonly conversation: Conversation;
+  readonly conversation: KernelSession;
 }
 
 /** An empty folder for a test file, removed after it; files are given as text by path. */
@@ -45,7 +45,7 @@ export function writeInto(folder: string, path: string, text: string): void {
 
 /** A kernel for a test file, shut down after it. */
 export async function testKernel(folder: string = testFolder()): Promise<TestKernel> {
-  const conversation = await converse(kernelCommand, folder);
+  const conversation = await startKernelSession(kernelCommand, folder);
   afterAll(() => conversation.end());
   return {
     folder,
@@ -55,7 +55,7 @@ export async function testKernel(folder: string = testFolder()): Promise<TestKer
   };
 }
 
-async function runCell(conversation: Conversation, code: string, options: object): Promise<Ran> {
+async function runCell(conversation: KernelSession, code: string, options: object): Promise<Ran> {
   const messages: Message[] = [];
   const content = { code, silent: false, store_history: true, allow_stdin: false, ...options };
   const { content: reply } = await conversation.request("execute_request", content, (one) =>

@@ -25,7 +25,7 @@ const requests: readonly (readonly [string, Record<string, unknown>])[] = [
 ];
 
 describe("a kernel", () => {
-  test(`answers the next good request after ${mutations} changed messages`, {
+  test(`answers the next valid request after ${mutations} altered messages`, {
     timeout: 180_000,
   }, async () => {
     const { connection, child, dispose } = await startKernelProcess(kernelCommand, testFolder());
@@ -58,7 +58,7 @@ describe("a kernel", () => {
     await dispose();
   });
 
-  test(`runs a good cell after ${randomCells} cells of random text`, { timeout: 180_000 }, async () => {
+  test(`runs a valid cell after ${randomCells} cells of random text`, { timeout: 180_000 }, async () => {
     const kernel = await testKernel();
     const words = fc.constantFrom(
       "const ",

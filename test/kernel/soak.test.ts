@@ -16,7 +16,7 @@ function residentKb(pid: number): number {
 
 // Source: common practice, no source; the bound is our promise. Cells declare again, as a notebook's do when they
 // are run over and over; the work done for a cell is counted by the processor time it takes, not by the clock.
-test(`${cells} cells in one kernel leave memory and cost where they were`, { timeout: 300_000 }, async () => {
+test(`${cells} cells in one kernel do not increase memory or cost`, { timeout: 300_000 }, async () => {
   const kernel = await testKernel();
   const pid = Number((await kernel.run("process.pid")).value);
   const cost = async (): Promise<number> => {

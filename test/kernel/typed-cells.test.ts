@@ -30,7 +30,7 @@ function complaints(): readonly ts.Diagnostic[] {
   return compiler.getPreEmitDiagnostics(program);
 }
 
-describe("under the compiler of cells", () => {
+describe("with the compiler of cells", () => {
   const all = complaints();
   const told = (wanted: (path: string) => boolean): readonly string[] =>
     all
@@ -40,15 +40,15 @@ describe("under the compiler of cells", () => {
           `${file?.fileName}: ${compiler.flattenDiagnosticMessageText(messageText, " ")}`,
       );
 
-  test("sample cells are right, and wrong where they say so", () => {
+  test("sample cells compile, and fail where they say so", () => {
     expect(told((path) => path.startsWith(folder))).toEqual([]);
   });
 
-  test("our own declarations can be read", () => {
+  test("the declarations of the package can be read", () => {
     expect(told((path) => path.startsWith(join(root, "dist")))).toEqual([]);
   });
 
-  test("it is the compiler that the project names", () => {
+  test("it is the compiler that package.json pins", () => {
     expect(compiler.version).toBe("5.0.4");
   });
 });

@@ -18,7 +18,7 @@ const frames = (content: Record<string, unknown> = {}): Uint8Array[] =>
   framesOf(envelope(message(content)), signature);
 const text = (frame: Uint8Array | undefined): string => Buffer.from(frame ?? []).toString();
 
-describe("the wire", () => {
+describe("the wire protocol", () => {
   test("puts ids, delimiter, signature, four dictionaries and buffers in this order", () => {
     const [route, delimiter, signed, ...rest] = frames({ code: "1" });
     expect([text(route), text(delimiter)]).toEqual(["route", "<IDS|MSG>"]);
@@ -39,7 +39,7 @@ describe("the wire", () => {
     );
   });
 
-  test("drops a message that was signed with another key, or seen before", () => {
+  test("drops messages signed with another key and replayed messages", () => {
     const decode = decoder(signature);
     const good = frames();
     expect(decoder(signatureOf("another key", "hmac-sha256"))(good)).toBeUndefined();
@@ -47,7 +47,7 @@ describe("the wire", () => {
     expect(decode(good)).toBeUndefined();
   });
 
-  test("takes unsigned messages, again and again, when the key is empty", () => {
+  test("accepts unsigned messages repeatedly when the key is empty", () => {
     const unsigned = signatureOf("", "hmac-sha256");
     const decode = decoder(unsigned);
     const plain = framesOf(envelope(message({})), unsigned);
@@ -55,7 +55,7 @@ describe("the wire", () => {
     expect([decode(plain), decode(plain)].every((one) => one !== undefined)).toBe(true);
   });
 
-  test("drops whatever is changed on the way, and never throws", () => {
+  test("drops every altered message, and never throws", () => {
     const changed = fc.record({ frame: fc.nat(7), at: fc.nat(400), to: fc.integer({ min: 1, max: 255 }) });
     fc.assert(
       fc.property(changed, ({ frame, at, to }) => {
@@ -71,9 +71,9 @@ describe("the wire", () => {
     );
   });
 
-  test("refuses a signature scheme that cannot be computed", () => {
+  test("rejects an unsupported signature scheme", () => {
     expect(() => signatureOf("key", "hmac-nothing")).toThrowErrorMatchingInlineSnapshot(
-      `[KernelError: The connection file asks for the signature scheme "hmac-nothing", which this Node cannot compute. Use "hmac-sha256".]`,
+      `[KernelError: The connection file has the signature scheme "hmac-nothing", which Node does not support. Use "hmac-sha256".]`,
     );
   });
 });

@@ -42,7 +42,7 @@ function stored(path: string): readonly StoredCell[] {
 }
 
 describe("a notebook run without a front end", () => {
-  test("keeps what a front end would keep", async () => {
+  test("stores what a front end would store", async () => {
     const folder = testFolder();
     const path = notebookIn(folder, "kept.ipynb", [
       'console.log("a"); console.log("b"); console.error("c");',
@@ -70,7 +70,7 @@ describe("a notebook run without a front end", () => {
     expect(readFileSync(join(folder, "out", "kept.html"), "utf8")).toContain("<!doctype html>");
   });
 
-  test("is stopped by an error, which is told, and leaves what an earlier run wrote", async () => {
+  test("stops at an error, reports it, and keeps the files of an earlier run", async () => {
     const folder = testFolder();
     const path = notebookIn(folder, "case.ipynb", ["1 + 1"]);
     await runNotebook(path, { kernel: kernelCommand });
@@ -85,7 +85,7 @@ describe("a notebook run without a front end", () => {
     expect(readdirSync(join(folder, "out"))).toEqual(["case.html", "case.ipynb"]);
   });
 
-  test("can be given other values for its top-level constants", async () => {
+  test("takes other values for its top-level constants", async () => {
     const folder = testFolder();
     const path = notebookIn(folder, "case.ipynb", [
       'const rate: number = 0.05, lender = "A";',
@@ -101,7 +101,7 @@ describe("a notebook run without a front end", () => {
     });
   });
 
-  test("refuses what is not a notebook", async () => {
+  test("rejects files that are not notebooks", async () => {
     const folder = testFolder({ "no.ipynb": "no" });
     const refused = { code: "unreadable-notebook" };
     await expect(runNotebook(join(folder, "no.ipynb"), { kernel: kernelCommand })).rejects.toMatchObject(
@@ -112,7 +112,7 @@ describe("a notebook run without a front end", () => {
     );
   });
 
-  test("says when its kernel ends", async () => {
+  test("reports that its kernel ended", async () => {
     const path = notebookIn(testFolder(), "case.ipynb", ["process.exit(3)"]);
     await expect(runNotebook(path, { kernel: kernelCommand })).rejects.toMatchObject({
       code: "kernel-ended",
@@ -124,7 +124,7 @@ describe("the command line", () => {
   const run = (...words: readonly string[]) =>
     spawnSync(process.execPath, [program, ...words], { encoding: "utf8" });
 
-  test("prints name, answer and page, and status 1 with the cell when one fails", () => {
+  test("prints name, answer and page, and the failed cell with status 1", () => {
     const folder = testFolder();
     const sentence =
       'display({ "text/plain": "x", "application/vnd.periodwise.answer+json": { sentence: "It is 42." } })';
@@ -133,19 +133,30 @@ describe("the command line", () => {
     const done = run("run", good, bad);
     expect(done.status).toBe(1);
     expect(done.stdout).toBe(`good.ipynb: It is 42. [${join(folder, "out", "good.html")}]\n`);
-    expect(plain(done.stderr)).toMatch(
-      /^bad\.ipynb: stopped at code cell 2 with TypeCheckError: Type 'string'/,
-    );
+    expect(plain(done.stderr)).toMatch(/^bad\.ipynb: code cell 2 failed with TypeCheckError: Type 'string'/);
     expect(done.stderr.match(/is not assignable/g)).toHaveLength(1);
   });
 
-  test("names what it does not know", () => {
-    expect(run("rn")).toMatchObject({
-      status: 2,
-      stderr: expect.stringContaining('There is no command "rn".'),
-    });
-    expect(run("run", "a.ipynb", "--ot", "b").stderr).toContain("There is no option --ot");
-    expect(run("run").stderr).toContain("Which notebook?");
+  test("names unknown commands and options and missing arguments, with status 2", () => {
+    const misuse = (message: string) => ({ status: 2, stderr: expect.stringContaining(message) });
+    expect(run("rn")).toMatchObject(misuse('Unknown command "rn". Did you mean "run"?'));
+    expect(run("run", "a.ipynb", "--ot", "b")).toMatchObject(misuse("Unknown option --ot."));
+    expect(run("run", "a.ipynb", "--out")).toMatchObject(misuse("Option --out needs a value"));
+    expect(run("run")).toMatchObject(misuse("Give a notebook: periodwise run <notebook...>"));
+  });
+
+  test("prints help and version", () => {
+    const { version } = JSON.parse(readFileSync(join(root, "package.json"), "utf8"));
+    for (const word of ["help", "--help", "-h"])
+      expect(run(word)).toMatchObject({ status: 0, stdout: expect.stringContaining("Usage: periodwise") });
+    for (const word of ["--version", "-v"])
+      expect(run(word)).toMatchObject({ status: 0, stdout: `${version}\n` });
+  });
+
+  test("says when a notebook is missing", () => {
+    const done = run("run", join(testFolder(), "none.ipynb"));
+    expect(done.status).toBe(1);
+    expect(done.stderr).toMatch(/^none\.ipynb: Notebook ".*" not found\. Give the path of an \.ipynb file/);
   });
 });
 

@@ -43,7 +43,7 @@ test("the amount is carried forward to 661.6 at hour 19 and 662.9 at hour 24", (
   expect(shown).toMatch(/\b24\b.*662\.9/);
 });
 
-test("the runner prints the answer and where the page is, and the page stands alone", () => {
+test("the runner prints the answer and the path of the page, and the page is self-contained", () => {
   expect(printed).toContain("yeast-1913.ipynb: ");
   expect(printed).toContain("reaches 650");
   const page = readFileSync(join(out, "yeast-1913.html"), "utf8");

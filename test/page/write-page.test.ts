@@ -20,7 +20,7 @@ function read(...cells: ShownCell[]): Document {
   return new JSDOM(writePage({ cells }, { source: "case.ipynb" })).window.document;
 }
 
-test("title and question stand first, then the answer, then the notebook", () => {
+test("title and question come first, then the answer, then the notebook", () => {
   const page = read(
     markdown("# Ferry loan: when is it over?\n\nWhat was lent."),
     code(
@@ -49,7 +49,7 @@ test("title and question stand first, then the answer, then the notebook", () =>
   expect(page.title).toBe("Ferry loan");
 });
 
-test("an answer's first sentence stands alone; margins and cautions follow it; progress is left out", () => {
+test("the first sentence of an answer stands out; intervals and cautions follow; progress is omitted", () => {
   const sentence = "In month 254. The interval is 250.5 to 258.";
   const page = read(
     code(
@@ -70,7 +70,7 @@ test("an answer's first sentence stands alone; margins and cautions follow it; p
 });
 
 describe("markdown", () => {
-  test("markup in it is shown as text, and only harmless links are links", () => {
+  test("HTML in it is shown as text, and only safe links are links", () => {
     const page = read(
       markdown(
         "Then <script>alert(1)</script> [run](javascript:alert(1)) [site](https://example.org) <b>x</b>",
@@ -83,7 +83,7 @@ describe("markdown", () => {
     expect(page.querySelector("main")?.textContent).toContain("<script>alert(1)</script>");
   });
 
-  test("a picture is shown when the notebook carries it, and named when it would be fetched", () => {
+  test("a picture is shown if the notebook contains it, and named if it would be fetched", () => {
     const cell = {
       ...markdown("![plan](attachment:plan.png) ![far](https://example.org/a.png)"),
       attachments: { "plan.png": { "image/png": "AAAA" } },
@@ -97,7 +97,7 @@ describe("markdown", () => {
 });
 
 describe("outputs", () => {
-  test("the richest form that a page can show is shown", () => {
+  test("the richest displayable form is shown", () => {
     const page = read(
       code(
         "a",
@@ -109,7 +109,7 @@ describe("outputs", () => {
     expect(page.querySelector(".output pre")?.textContent).toBe("<only plain>");
   });
 
-  test("streams in a row are one block without a terminal's colours", () => {
+  test("consecutive streams become one block without terminal colours", () => {
     const said = (text: string): ShownOutput => ({ output_type: "stream", name: "stdout", text });
     const page = read(code("a", said("one \u001b[31mred\u001b[0m\n"), said("two")));
     expect(Array.from(page.querySelectorAll(".output pre")).map((pre) => pre.textContent)).toEqual([
@@ -117,7 +117,7 @@ describe("outputs", () => {
     ]);
   });
 
-  test("an error is shown as such", () => {
+  test("an error is shown as an error", () => {
     const page = read(
       code("a", {
         output_type: "error",
@@ -130,7 +130,7 @@ describe("outputs", () => {
   });
 });
 
-test("the plotting library is on the page once, whether or not the notebook has it", () => {
+test("the plotting library is on the page once, with or without a copy in the notebook", () => {
   const library = '<script data-periodwise="library">/*library of the notebook*/</script>';
   const figure = '<div class="pw-figure"></div>';
   const html = writePage({
@@ -141,7 +141,7 @@ test("the plotting library is on the page once, whether or not the notebook has 
   expect(writePage({ cells: [markdown("no figure")] })).not.toContain("periodwisePlot");
 });
 
-test("a page may fetch nothing, says so to the browser, and is the same for the same notebook", () => {
+test("a page fetches nothing, by its content security policy, and is the same for the same notebook", () => {
   const cells = [markdown("# A"), code("1 < 2", data({ "text/plain": "true" }))];
   const html = writePage({ cells });
   expect(html).toContain("default-src 'none'");

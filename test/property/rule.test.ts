@@ -17,7 +17,7 @@ test("reading a printed rule gives the same rule", () => {
       const again = recurrence(printed, { inputs: ["u"] });
       expect(ruleText(again)).toBe(printed);
       const values = [rule, again].map((one) => {
-        const next = new Float64Array(one.states.length + one.memory.length);
+        const next = new Float64Array(one.states.length + one.lags.length);
         const state = new Float64Array(next.length).fill(1.25);
         const parameters = new Float64Array(one.parameters.length).fill(0.75);
         compileRule(one).step(state, parameters, [Float64Array.of(1, 2, 3)], 1, next);
@@ -33,7 +33,7 @@ test("generated code and interpreter give the same bits, values and sensitivitie
   void fc.assert(
     fc.property(ruleSource(false), states, positive, positive, (text, start, r, K) => {
       const rule = recurrence(text, { inputs: ["u"] });
-      const width = rule.states.length + rule.memory.length;
+      const width = rule.states.length + rule.lags.length;
       const unknowns = rule.parameters.length + width;
       const parameters = Float64Array.from(rule.parameters, (name) => (name === "r" ? r : K));
       const initial = Float64Array.from(start.slice(0, width));
@@ -61,7 +61,7 @@ test("many paths abreast take the same steps as each alone", () => {
   void fc.assert(
     fc.property(ruleSource(false), states, positive, positive, (text, start, r, K) => {
       const rule = recurrence(text, { inputs: ["u"] });
-      const width = rule.states.length + rule.memory.length;
+      const width = rule.states.length + rule.lags.length;
       const inputs = [Float64Array.of(0.5, 1, 1.5, 2)];
       const own = [1, 1.5, 0.5].map((k) =>
         Float64Array.from(rule.parameters, (name) => k * (name === "r" ? r : K)),
@@ -117,7 +117,7 @@ test("sensitivities agree with differences of paths", () => {
   void fc.assert(
     fc.property(ruleSource(true), states, positive, positive, (text, start, r, K) => {
       const rule = recurrence(text, { inputs: ["u"] });
-      const width = rule.states.length + rule.memory.length;
+      const width = rule.states.length + rule.lags.length;
       const unknowns = rule.parameters.length + width;
       const at = [...rule.parameters.map((name) => (name === "r" ? r : K)), ...start.slice(0, width)];
       const inputs = [Float64Array.of(0.5, 1, 1.5, 2)];

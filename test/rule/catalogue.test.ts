@@ -112,7 +112,7 @@ test("every rule of the catalogue has a case here", () => {
 });
 
 test.each(cases.map((one) => [label(one), one] as const))("%s holds in its own setting", (_, one) => {
-  for (const text of one.rule.named!.holds)
+  for (const text of one.rule.named!.validWhen)
     expect([text, formula(text, "condition").at(valuesOf(one))]).toEqual([text, 1]);
 });
 

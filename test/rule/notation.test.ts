@@ -1,5 +1,5 @@
 import { expect, test } from "vitest";
-import { eventOrder, recurrence, roughness, ruleTex } from "../../src/rule/index.js";
+import { eventOrder, nonsmoothCalls, recurrence, ruleTex } from "../../src/rule/index.js";
 
 test("TeX is set as a paper would: fractions, subscripts, side-by-side products", () => {
   expect(ruleTex(recurrence("ΔN = r*N*(1 - N/K)"))).toBe(
@@ -33,7 +33,7 @@ test("the order of events is the order of the lines", () => {
 
 test("kinks and jumps are listed where a fit could meet them", () => {
   const rule = recurrence("N[t+1] = max(N - c, 0) + floor(N) + mod(t, 12)");
-  expect(roughness(rule)).toEqual({
+  expect(nonsmoothCalls(rule)).toEqual({
     kinks: [{ function: "max", start: 9, end: 22 }],
     jumps: [{ function: "floor", start: 25, end: 33 }],
   });
@@ -45,13 +45,13 @@ test("sums of different units and periods of different lengths are found", () =>
   });
   expect(rule.findings.map(({ message }) => message)).toMatchInlineSnapshot(`
     [
-      "N + i*N + K joins N + i*N in 10^4 cells/mL with K in mL. Correct the unit, or the rule.",
+      "N + i*N + K combines different units: N + i*N has the unit 10^4 cells/mL, K has the unit mL. Correct the units or the rule.",
     ]
   `);
   const dated = recurrence("owed[t+1] = owed*(1 + i) - p", { units: { i: "1/year", p: "EUR/month" } });
   expect(dated.findings.map(({ message }) => message)).toMatchInlineSnapshot(`
     [
-      ""i" is stated per year and "p" per month; a step is one period, so convert one of them by compounding. Correct the unit, or the rule.",
+      ""i" is per year and "p" per month, but a step is one period. Convert one of them by compounding.",
     ]
   `);
   const right = recurrence("ΔN = r*N*(1 - N/K)", { units: { N: "cells/mL", K: "cells/mL", r: "1/hour" } });

@@ -36,7 +36,7 @@ async function refused(content: string | Uint8Array, options?: ReadOptions, endi
 }
 
 describe("a delimited file", () => {
-  test("is read whatever separates its cells", async () => {
+  test("is read with every delimiter", async () => {
     const expected = { week: [1, 2], stock: [90.5, 83] };
     for (const delimiter of [",", ";", "\t", "|"]) {
       const text = `week${delimiter}stock\n1${delimiter}90.5\n2${delimiter}83\n`;
@@ -44,7 +44,7 @@ describe("a delimited file", () => {
     }
   });
 
-  test("is read whatever ends its lines", async () => {
+  test("is read with every line ending", async () => {
     for (const end of ["\n", "\r\n", "\r"])
       expect(await columns(`week,stock${end}1,90${end}2,83${end}`)).toEqual({
         week: [1, 2],
@@ -54,18 +54,18 @@ describe("a delimited file", () => {
   });
 
   // RFC 4180, section 2, rules 5 to 7: quoted cells, line breaks and doubled quotes in them.
-  test("keeps delimiters, line breaks and quotes inside quoted cells", async () => {
+  test("keeps delimiters, line breaks and quotes inside quoted cells (RFC 4180)", async () => {
     expect(await columns('who,said\n"Ferry, north","a ""short"" note"\nStore,"two\nlines"\n')).toEqual({
       who: ["Ferry, north", "Store"],
       said: ['a "short" note', "two\nlines"],
     });
   });
 
-  test("tells an empty cell from zero", async () => {
+  test("distinguishes an empty cell from zero", async () => {
     expect(await columns("week,stock\n1,\n2,0\n")).toEqual({ week: [1, 2], stock: [Number.NaN, 0] });
   });
 
-  test("is read with a decimal comma where the cells show it", async () => {
+  test("is read with a decimal comma when the cells have one", async () => {
     const table = await read("week;stock\n1;1.234,50\n2;0,5\n");
     expect(Array.from(table.columns[1]!)).toEqual([1234.5, 0.5]);
     expect(table.source.found).toEqual(["Numbers are read with a decimal comma."]);
@@ -83,12 +83,12 @@ describe("a delimited file", () => {
     expect(await columns("week;owed\n1;1'234.5\n2;7.25\n")).toEqual({ week: [1, 2], owed: [1234.5, 7.25] });
   });
 
-  test("asks for the decimal sign where cells contradict each other or none settles it", async () => {
+  test("asks for the decimal sign when cells contradict each other or leave it open", async () => {
     expect(await refused('row;balance\n1;1.234,56\n2;"1,234.56"\n')).toBe(
-      'decimal-sign-unclear: Row 2, balance: \'1,234.56\' - decimal sign unclear; choose comma or point: decimal: "," or decimal: ".".',
+      'decimal-sign-unclear: Row 2, balance: the decimal sign of "1,234.56" is unclear. Give decimal: "," or decimal: ".".',
     );
     expect(await refused("row;balance\n1;1.234\n2;5.678\n")).toContain(
-      "decimal-sign-unclear: Row 1, balance: '1.234'",
+      'decimal-sign-unclear: Row 1, balance: the decimal sign of "1.234"',
     );
     expect(await columns("row;balance\n1;1.234\n2;5.678\n", { decimal: "," })).toEqual({
       row: [1, 2],
@@ -100,15 +100,15 @@ describe("a delimited file", () => {
     });
   });
 
-  test("reads credits in brackets or with a minus behind as negative, and says so", async () => {
+  test("reads amounts in brackets or with a trailing minus as negative, and says so", async () => {
     const table = await read("row;paid\n1;(412.00)\n2;35.50-\n3;-7\n");
     expect(Array.from(table.columns[1]!)).toEqual([-412, -35.5, -7]);
     expect(table.source.found).toEqual([
-      'In "paid" 2 amounts in brackets or with a minus behind are read as negative.',
+      'Column "paid": read 2 amounts in brackets or with a trailing minus as negative.',
     ]);
   });
 
-  test("finds the order of day and month where a day above twelve shows it, and asks where none does", async () => {
+  test("detects the order of day and month from a day above twelve, and asks when there is none", async () => {
     expect(await columns("date,owed\n03/04/2025,1\n17/04/2025,2\n")).toEqual({
       date: ["2025-04-03", "2025-04-17"],
       owed: [1, 2],
@@ -118,10 +118,10 @@ describe("a delimited file", () => {
       owed: [1, 2],
     });
     expect(await refused("date,owed\n03/04/2025,1\n04/04/2025,2\n")).toBe(
-      'ambiguous-date: Ambiguous date: row 1, date: \'03/04/2025\'. Say dates: "day-month-year" or dates: "month-day-year"; dates: "text" leaves the column as it is.',
+      'ambiguous-date: Row 1, date: the date "03/04/2025" is ambiguous. Give dates: "day-month-year" or dates: "month-day-year"; dates: "text" leaves the column unchanged.',
     );
     expect(await refused("date,owed\n13/04/2025,1\n04/14/2025,2\n")).toContain(
-      "mixed-dates: Row 2, date: '04/14/2025'",
+      'mixed-dates: Row 2, date: "04/14/2025" is not a date in the order day-month-year',
     );
     expect(await columns("date,owed\n03/04/2025,1\n", { dates: "month-day-year" })).toEqual({
       date: ["2025-03-04"],
@@ -135,23 +135,23 @@ describe("a delimited file", () => {
     expect(await columns("date,owed\n3 Apr 2025,1\n", {})).toEqual({ date: ["2025-04-03"], owed: [1] });
   });
 
-  test("keeps the one cell of a column of numbers that is none, and says where it is", async () => {
+  test("keeps the one non-number of a numeric column as text, and says where it is", async () => {
     const rows = Array.from({ length: 9 }, (_, i) => `${i};${i},5`);
     const table = await read(`week;coils\n${rows.join("\n")}\n9;15O,2\n`);
     expect(Array.from(table.columns[1]!)).toEqual([0.5, 1.5, 2.5, 3.5, 4.5, 5.5, 6.5, 7.5, 8.5, "15O,2"]);
     expect(table.source.found).toEqual([
       "Numbers are read with a decimal comma.",
-      '"coils" is a column of numbers, but row 10 holds "15O,2": kept as text.',
+      'Column "coils" has numbers, but row 10 is "15O,2"; such cells are kept as text.',
     ]);
   });
 
-  test("finds the bad cell far behind the first rows, where the engine has refused the file", async () => {
+  test("finds a bad cell far below the first rows, where the database engine rejects the file", async () => {
     const rows = Array.from({ length: 9000 }, (_, i) => `${i},${i === 8499 ? "x9" : i + 0.5}`);
     const table = await read(`week,coils\n${rows.join("\n")}\n`);
     expect(table.columns[1]![8499]).toBe("x9");
     expect(table.columns[1]![8500]).toBe(8500.5);
     expect(table.source.found).toEqual([
-      '"coils" is a column of numbers, but row 8500 holds "x9": kept as text.',
+      'Column "coils" has numbers, but row 8500 is "x9"; such cells are kept as text.',
     ]);
     const ragged = [...rows.slice(0, 8000), "8000", ...rows.slice(8001)];
     expect(await refused(`week,coils\n${ragged.join("\n")}\n`)).toMatch(
@@ -161,14 +161,14 @@ describe("a delimited file", () => {
     expect((await read(`week,coils\n${long.join("\n")}\n`)).columns[1]![8499]).toBe("12345678901234567");
   });
 
-  test("leaves codes as text: leading zeros and more digits than a number keeps", async () => {
+  test("keeps codes as text: leading zeros and more digits than a double holds", async () => {
     expect(await columns("item,id\n007,12345678901234567\n012,2\n")).toEqual({
       item: ["007", "012"],
       id: ["12345678901234567", "2"],
     });
   });
 
-  test("takes named texts for missing values and no others", async () => {
+  test("reads the listed texts as missing values, and no others", async () => {
     expect(await columns("week,stock\n1,n.d.\n2,83\n", { missing: ["n.d."] })).toEqual({
       week: [1, 2],
       stock: [Number.NaN, 83],
@@ -176,21 +176,21 @@ describe("a delimited file", () => {
     expect(await columns("week,stock\n1,n.d.\n2,83\n")).toEqual({ week: [1, 2], stock: ["n.d.", "83"] });
   });
 
-  test("is read in UTF-8 with a mark, UTF-16 with a mark, and another encoding when told", async () => {
+  test("is read in UTF-8 and UTF-16 with a byte-order mark, and in another encoding when given", async () => {
     const text = "jour,valeur\nété,1\nhiver,2\n";
     const expected = { jour: ["été", "hiver"], valeur: [1, 2] };
     expect(await columns(`\ufeff${text}`)).toEqual(expected);
     expect(await columns(Buffer.from(`\ufeff${text}`, "utf16le"))).toEqual(expected);
     expect(await columns(Buffer.from(text, "latin1"), { encoding: "windows-1252" })).toEqual(expected);
     expect(await refused(Buffer.from(text, "latin1"))).toBe(
-      'encoding-unclear: Line 2 of "/record-FILE.csv" is not UTF-8 text: "été,1". Say encoding: "windows-1252", or save the file as UTF-8 if it mixes encodings.'.replace(
+      'encoding-unclear: Line 2 of "/record-FILE.csv" is not UTF-8: "été,1". Give `encoding`, such as encoding: "windows-1252", or save the file as UTF-8.'.replace(
         "FILE",
         String(files - 1),
       ),
     );
   });
 
-  test("mixed encodings are refused with the line at which they part", async () => {
+  test("mixed encodings are rejected with the first line of the second one", async () => {
     const mixed = Buffer.concat([
       Buffer.from("jour,valeur\nété,1\n", "utf8"),
       Buffer.from("été,2\n", "latin1"),
@@ -198,18 +198,18 @@ describe("a delimited file", () => {
     expect(await refused(mixed)).toContain("encoding-unclear: Line 3");
   });
 
-  test("refuses ragged rows, open quotes, missing headers, no rows and unknown separators, saying where", async () => {
+  test("rejects ragged rows, open quotes, missing headers, empty files and unknown delimiters, with the place", async () => {
     expect(await refused("a,b\n1,2\n3\n")).toMatch(
-      /^ragged-row: Row 2 \(line 3\) of ".*" has 1 cells where the header has 2\./,
+      /^ragged-row: Row 2 \(line 3\) of ".*" has 1 cell; the header has 2\./,
     );
     expect(await refused("a,b\n1,2,3\n")).toMatch(/^ragged-row: Row 1 \(line 2\)/);
-    expect(await refused('a,b\n1,"open\n')).toMatch(/^unended-quote: A quoted cell that begins on line 2/);
+    expect(await refused('a,b\n1,"open\n')).toMatch(/^unended-quote: The quoted cell that starts on line 2/);
     expect(await refused("1,2\n3,4\n")).toMatch(
-      /^header-missing: The first row of ".*" holds numbers, not names: 1, 2\./,
+      /^header-missing: The first row of ".*" has numbers instead of column names: 1, 2\./,
     );
-    expect(await refused("a,b\n")).toMatch(/^no-data-rows: No data rows were found\./);
-    expect(await refused("")).toMatch(/^no-data-rows: No data rows were found\./);
-    expect(await refused("a,b;c\n1,2;3\n")).toMatch(/^delimiter-unclear: What separates the cells/);
+    expect(await refused("a,b\n")).toMatch(/^no-data-rows: No data rows were found in /);
+    expect(await refused("")).toMatch(/^no-data-rows: No data rows were found in /);
+    expect(await refused("a,b;c\n1,2;3\n")).toMatch(/^delimiter-unclear: Cannot detect the delimiter of /);
     expect(await columns("1,2\n3,4\n", { header: false })).toEqual({
       "column 1": [1, 3],
       "column 2": [2, 4],
@@ -217,22 +217,22 @@ describe("a delimited file", () => {
     expect(await columns("Store list\nmade today\na,b\n1,2\n", { skip: 2 })).toEqual({ a: [1], b: [2] });
   });
 
-  test("names empty and doubled columns apart, and keeps any other name as it is", async () => {
+  test("renames empty and repeated column names, and keeps all others", async () => {
     const table = await read("__proto__,,owed,owed,<b>x</b>\n1,2,3,4,5\n");
     expect(table.names).toEqual(["__proto__", "column 2", "owed", "owed (2)", "<b>x</b>"]);
     expect(table.source.found).toEqual([
-      'Column 2 has no name and is called "column 2".',
-      'Another column is named "owed"; column 4 is called "owed (2)".',
+      'Column 2 has no name; it is called "column 2".',
+      'Column 4 repeats the name "owed"; it is called "owed (2)".',
     ]);
   });
 
-  test("leaves empty rows at the end out and says how many", async () => {
+  test("skips empty rows at the end and says how many", async () => {
     const table = await read("week;stock\n1;2\n;\n;\n");
     expect(table.source.rows).toBe(1);
-    expect(table.source.found).toEqual(["2 empty rows at the end are left out."]);
+    expect(table.source.found).toEqual(["Skipped 2 empty rows at the end."]);
   });
 
-  test("takes a cell that begins with = as the text it is", async () => {
+  test("reads a cell that starts with = as text", async () => {
     expect(await columns('week,note\n1,=1+1\n2,"=HYPERLINK(""x"")"\n')).toEqual({
       week: [1, 2],
       note: ["=1+1", '=HYPERLINK("x")'],
@@ -240,7 +240,7 @@ describe("a delimited file", () => {
   });
 });
 
-test("a file that is not there is refused with the nearest name beside it", async () => {
+test("a missing file is rejected with the nearest name in the folder", async () => {
   writeFileSync(join(folder, "stock-levels.csv"), "a,b\n1,2\n");
   await expect(readTable(join(folder, "stock-level.csv"))).rejects.toThrow(
     /Did you mean "stock-levels.csv"\?/,

@@ -53,12 +53,12 @@ for (const ending of ["csv", "parquet", "duckdb"]) {
   });
 }
 
-test("files that must be looked at cell by cell, and columns that are not there, are refused", async () => {
+test("files that have to be read cell by cell, and missing columns, are rejected", async () => {
   const path = join(folder, "comma.csv");
   writeFileSync(path, "item;week;stock\na;1;1,5\n");
-  await expect(all(path, { by: "item" })).rejects.toThrow("cannot be read series by series");
+  await expect(all(path, { by: "item" })).rejects.toThrow("cannot be streamed by series");
   writeFileSync(path, "item,week,stock\na,1,1.5\n");
   await expect(all(path, { by: "itm" })).rejects.toThrow(
-    'The file has no column "itm". Its columns are "item", "week", "stock". Did you mean "item"?',
+    'The file has no column "itm". It has "item", "week" and "stock". Did you mean "item"?',
   );
 });

@@ -12,21 +12,21 @@ import {
   signatureOf,
 } from "../../kernel/index.js";
 
-type Outlet = "shell" | "control" | "stdin";
+type RequestChannel = "shell" | "control" | "stdin";
 
-/** The client's end of the protocol's channels. */
+/** The client side of the protocol's channels. */
 export interface KernelClient {
-  /** Sends a request and tells its message id. */
-  readonly send: (outlet: Outlet, type: string, content: object, parent?: Message) => string;
-  /** Hears every message that comes, with the channel it came by. Returns how to stop hearing. */
-  readonly hear: (listener: (channel: Outlet | "iopub", message: Message) => void) => () => void;
+  /** Sends a request and returns its message id. */
+  readonly send: (outlet: RequestChannel, type: string, content: object, parent?: Message) => string;
+  /** Calls the listener for every message, with its channel. Returns a function that removes the listener. */
+  readonly listen: (listener: (channel: RequestChannel | "iopub", message: Message) => void) => () => void;
   readonly close: () => Promise<void>;
 }
 
-/** A kernel that is starting has not bound its sockets yet. */
+/** Short, because a kernel that is starting has not bound its sockets yet. */
 const reconnectInterval = 20;
 
-/** Connects to a kernel. The same routing id is used for shell and stdin, so that questions find their way. */
+/** Connects to a kernel. The same routing id is used for shell and stdin, as input requests need. */
 export function kernelClient(connection: Connection): KernelClient {
   const signature = signatureOf(connection.key, connection.signature_scheme);
   const routingId = randomUUID();
@@ -45,16 +45,19 @@ export function kernelClient(connection: Connection): KernelClient {
     stdin: serialSender(sockets.stdin),
   };
   const newHeader = headersOf("periodwise");
-  const listeners = new Set<(channel: Outlet | "iopub", message: Message) => void>();
-  const listen = async (channel: Outlet | "iopub", socket: AsyncIterable<Buffer[]>): Promise<void> => {
+  const listeners = new Set<(channel: RequestChannel | "iopub", message: Message) => void>();
+  const receiveFrom = async (
+    channel: RequestChannel | "iopub",
+    socket: AsyncIterable<Buffer[]>,
+  ): Promise<void> => {
     const decode = decoder(signature);
     for await (const frames of socket) {
       const message = decode(frames);
       if (message) for (const listener of listeners) listener(channel, message);
     }
   };
-  void listen("iopub", iopub);
-  for (const channel of ["shell", "control", "stdin"] as const) void listen(channel, sockets[channel]);
+  void receiveFrom("iopub", iopub);
+  for (const channel of ["shell", "control", "stdin"] as const) void receiveFrom(channel, sockets[channel]);
 
   return {
     send: (outlet, type, content, parent) => {
@@ -63,7 +66,7 @@ export function kernelClient(connection: Connection): KernelClient {
       senders[outlet].send(framesOf(envelope({ ...message, content: { ...content } }), signature));
       return header.msg_id;
     },
-    hear: (listener) => {
+    listen: (listener) => {
       listeners.add(listener);
       return () => void listeners.delete(listener);
     },

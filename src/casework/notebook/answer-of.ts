@@ -2,7 +2,7 @@ import type { Notebook } from "./notebook.js";
 
 const answerType = "application/vnd.periodwise.answer+json";
 
-/** The sentence that the notebook gives as its answer: the last one, if it gives any. */
+/** The answer of a notebook: its last answer sentence, if any. */
 export function answerOf(notebook: Notebook): string | undefined {
   const sentences = notebook.cells
     .flatMap((cell) => cell.outputs ?? [])

@@ -1,11 +1,11 @@
 import { randomBytes } from "node:crypto";
 import { readFileSync } from "node:fs";
-import { unreadableNotebook } from "../refusals.js";
+import { unreadableNotebookError } from "../errors.js";
 
 /** An output of a code cell, as nbformat 4.5 stores it. */
 export type Output = Readonly<Record<string, unknown>> & { readonly output_type: string };
 
-/** A cell, with its source as one text. @see nbformat 4.5, "Cell types". */
+/** A cell with its source as one string. @see nbformat 4.5, "Cell types". */
 export interface Cell {
   readonly id: string;
   readonly cell_type: "code" | "markdown" | "raw";
@@ -22,7 +22,7 @@ export interface Notebook {
   readonly cells: readonly Cell[];
 }
 
-/** Reads a notebook of format 4, bringing it to 4.5: every cell has an id, and its source is one text. */
+/** Reads a notebook of format 4 and converts it to 4.5: every cell has an id, and its source is one string. */
 export function readNotebook(path: string): Notebook {
   try {
     const given = JSON.parse(readFileSync(path, "utf8")) as Record<string, unknown>;
@@ -30,7 +30,7 @@ export function readNotebook(path: string): Notebook {
     const metadata = (given["metadata"] ?? {}) as Notebook["metadata"];
     return { nbformat: 4, nbformat_minor: 5, metadata, cells: given["cells"].map(readCell) };
   } catch (cause) {
-    throw unreadableNotebook(path, cause);
+    throw unreadableNotebookError(path, cause);
   }
 }
 
@@ -51,7 +51,7 @@ function joined(text: unknown): string {
   return Array.isArray(text) ? text.join("") : String(text ?? "");
 }
 
-/** A notebook as the text of a file, sources and streams split into lines as notebook programs write them. */
+/** A notebook as file contents, with sources split into lines as notebook programs write them. */
 export function notebookText(notebook: Notebook): string {
   const cells = notebook.cells.map((cell) => ({ ...cell, source: lines(cell.source) }));
   return `${JSON.stringify({ cells, metadata: notebook.metadata, nbformat: 4, nbformat_minor: 5 }, undefined, 1)}\n`;

@@ -1,11 +1,11 @@
 import { joined, type ShownNotebook, type ShownOutput } from "./shown-notebook.js";
 
-/** MIME types by which outputs say what they are to a page; all hold JSON. */
+/** MIME types of outputs with a special place on the page; all contain JSON. */
 const caseType = "application/vnd.periodwise.case+json";
 const progressType = "application/vnd.periodwise.progress+json";
 const answerType = "application/vnd.periodwise.answer+json";
 
-/** What stands at the top of a page. */
+/** The head of a page. */
 export interface CaseHead {
   readonly title: string | undefined;
   readonly question: string | undefined;
@@ -13,24 +13,24 @@ export interface CaseHead {
   readonly answers: readonly { readonly sentence: string; readonly cautions: readonly string[] }[];
 }
 
-/** Reads a notebook's title, question and answers from what its cells put out. */
+/** Reads title, question and answers from the outputs of a notebook. */
 export function caseHead(notebook: ShownNotebook): CaseHead {
   const outputs = notebook.cells.flatMap((cell) => cell.outputs ?? []);
-  const opened = outputs.map((output) => jsonOf(output, caseType)).find((found) => found !== undefined);
+  const caseData = outputs.map((output) => jsonOf(output, caseType)).find((found) => found !== undefined);
   return {
-    title: text(opened, "title") ?? firstHeading(notebook),
-    question: text(opened, "question"),
-    about: text(opened, "about"),
+    title: text(caseData, "title") ?? firstHeading(notebook),
+    question: text(caseData, "question"),
+    about: text(caseData, "about"),
     answers: outputs.flatMap((output) => {
-      const said = jsonOf(output, answerType);
-      const sentence = text(said, "sentence");
-      return sentence === undefined ? [] : [{ sentence, cautions: texts(said, "cautions") }];
+      const answer = jsonOf(output, answerType);
+      const sentence = text(answer, "sentence");
+      return sentence === undefined ? [] : [{ sentence, cautions: texts(answer, "cautions") }];
     }),
   };
 }
 
-/** Whether an output is left out of a page: the head says it already, or it tells how long some work took. */
-export function leftOut(output: ShownOutput): boolean {
+/** Whether an output is omitted from a page: it is shown in the head, or it is a progress line. */
+export function isOmitted(output: ShownOutput): boolean {
   return jsonOf(output, caseType) !== undefined || jsonOf(output, progressType) !== undefined;
 }
 

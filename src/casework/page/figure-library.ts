@@ -2,8 +2,8 @@ import { readFileSync } from "node:fs";
 import { createRequire } from "node:module";
 
 /**
- * The plotting library as a script element that draws the figures waiting on the page. Figures put a function each
- * into `window.periodwiseFigures`; the library calls them and stays at `window.periodwisePlot`.
+ * The plotting library as a script element that draws the figures of the page. Each figure adds a function to
+ * `window.periodwiseFigures`; the library calls them and remains available as `window.periodwisePlot`.
  */
 export function figureLibrary(): string {
   const file = createRequire(__filename).resolve("plotly.js-basic-dist-min");

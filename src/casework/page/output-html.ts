@@ -1,16 +1,17 @@
-import { escapeTerminal, escapeText } from "./escape-text.js";
+import { escapeHtml } from "../../../kernel-helpers/wording/index.js";
+import { escapeTerminal } from "./escape-terminal.js";
 import { markdownHtml } from "./markdown-html.js";
 import { joined, type ShownOutput } from "./shown-notebook.js";
 
-type Draw = (data: string) => string;
+type Render = (data: string) => string;
 
-const image = (type: string): Draw => {
+const image = (type: string): Render => {
   return (data) =>
-    `<img src="data:${type};base64,${escapeText(data.replace(/\s/g, ""))}" alt="picture made by the code above">`;
+    `<img src="data:${type};base64,${escapeHtml(data.replace(/\s/g, ""))}" alt="picture from the code above">`;
 };
 
-// Richest first: the page shows the first of these that an output has.
-const drawings: Readonly<Record<string, Draw>> = {
+// Richest first: the page shows the first one that an output has.
+const renderers: Readonly<Record<string, Render>> = {
   "text/html": (data) => withoutLibrary(data),
   "image/svg+xml": (data) => image("image/svg+xml")(Buffer.from(data).toString("base64")),
   "image/png": image("image/png"),
@@ -19,7 +20,7 @@ const drawings: Readonly<Record<string, Draw>> = {
   "text/plain": (data) => `<pre>${escapeTerminal(data)}</pre>`,
 };
 
-/** The outputs of a cell as HTML; runs of the same stream become one block. */
+/** The outputs of a cell as HTML; consecutive chunks of one stream become one block. */
 export function outputsHtml(outputs: readonly ShownOutput[]): string {
   return mergedStreams(outputs)
     .map(
@@ -38,9 +39,9 @@ function outputHtml(output: ShownOutput): string {
     return `<pre>${escapeTerminal(trace)}</pre>`;
   }
   const data = output.data ?? {};
-  const type = Object.keys(drawings).find((kind) => Object.hasOwn(data, kind));
-  if (type !== undefined) return (drawings[type] as Draw)(joined(data[type]));
-  return `<pre>${escapeText(JSON.stringify(data, null, 1))}</pre>`;
+  const type = Object.keys(renderers).find((kind) => Object.hasOwn(data, kind));
+  if (type !== undefined) return (renderers[type] as Render)(joined(data[type]));
+  return `<pre>${escapeHtml(JSON.stringify(data, null, 1))}</pre>`;
 }
 
 function mergedStreams(outputs: readonly ShownOutput[]): ShownOutput[] {
@@ -56,7 +57,7 @@ function mergedStreams(outputs: readonly ShownOutput[]): ShownOutput[] {
   return merged;
 }
 
-/** The plotting library comes with a notebook's first figure; a page has its own copy at its end. */
+/** Removes the plotting library that comes with the first figure of a notebook; a page has its own copy at its end. */
 function withoutLibrary(html: string): string {
   return html.replace(/<script data-periodwise="library">[\s\S]*?<\/script>/g, "");
 }

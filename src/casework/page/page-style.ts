@@ -1,4 +1,4 @@
-/** How a page looks: on a screen from 320 pixels up, and on paper. */
+/** Style sheet of a page, for screens from 320 pixels up and for paper. */
 export const pageStyle: string = `
 :root{--ink:#16262e;--quiet:#4d5f68;--line:#b9c4c6;--paper:#fffefb;--shade:#eef3f1;--accent:#0b5a6b;--warn:#8c1d18}
 *{box-sizing:border-box}

@@ -1,7 +1,7 @@
-/** Text as the notebook format keeps it: whole, or in lines. */
+/** Text in the notebook format: one string, or an array of lines. */
 export type Lines = string | readonly string[];
 
-/** The parts of an executed notebook (nbformat 4.5) that a page is made from. */
+/** The parts of an executed notebook (nbformat 4.5) that a page shows. */
 export interface ShownNotebook {
   readonly cells: readonly ShownCell[];
   readonly metadata?: Readonly<Record<string, unknown>>;
@@ -27,7 +27,7 @@ export interface ShownOutput {
   readonly traceback?: readonly string[];
 }
 
-/** One string of a text that may be kept in lines. */
+/** The text as one string. */
 export function joined(lines: unknown): string {
   if (Array.isArray(lines)) return lines.join("");
   return typeof lines === "string" ? lines : "";

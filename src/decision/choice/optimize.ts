@@ -2,9 +2,9 @@ import type { Fit } from "../../estimate/index.js";
 import { quantile } from "../../numeric/index.js";
 import type { Ground } from "../../projection/index.js";
 import type { Rule } from "../../rule/index.js";
-import { isRisk, type Measure, measuredWords, measureWords } from "../measure/measure.js";
+import { isProbability, type Measure, measuredWords, measureWords } from "../measure/measure.js";
 import { type MeasureReader, measureReader } from "../measure/read-measure.js";
-import { refuseNoEffect, refuseNoObjective, refuseRiskObjective } from "../refusals.js";
+import { refuseNoEffect, refuseNoObjective, refuseProbabilityObjective } from "../refusals.js";
 import { type Setting, settingOf } from "../setting/set-value.js";
 import { drawnGrounds } from "../setting/setting-margin.js";
 import { withUnplanned } from "../setting/setting-range.js";
@@ -69,7 +69,7 @@ export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum
   const { vary: name, range: between, maximize: most, minimize: least, level = 0.95 } = options;
   const measure = most ?? least;
   if (measure === undefined || (most !== undefined && least !== undefined)) throw refuseNoObjective();
-  if (isRisk(measure)) throw refuseRiskObjective();
+  if (isProbability(measure)) throw refuseProbabilityObjective();
   const standing = standingOf(subject, withUnplanned(subject, options, name, between));
   const setting = settingOf(standing, name);
   const sign = most === undefined ? -1 : 1;
@@ -94,7 +94,7 @@ export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum
   };
   const notes = signNotes(standing, setting, answer.value, measure, answer.achieved);
   const sentence = [bestSentence(answer, measure, sign, standing), ...notes].join(" ");
-  return Object.freeze({ kind: "optimum", ...answer, sentence });
+  return { kind: "optimum", ...answer, sentence };
 }
 
 /** The objective, turned so that the best is the highest; a place without a value is the lowest. */

@@ -1,9 +1,15 @@
 import type { Fit } from "../../estimate/index.js";
 import type { Ground } from "../../projection/index.js";
 import type { Rule } from "../../rule/index.js";
-import { isRisk, type Measure, measuredClause, measuredWords, measureWords } from "../measure/measure.js";
+import {
+  isProbability,
+  type Measure,
+  measuredClause,
+  measuredWords,
+  measureWords,
+} from "../measure/measure.js";
 import { measureReader } from "../measure/read-measure.js";
-import { refuseRiskObjective } from "../refusals.js";
+import { refuseProbabilityObjective } from "../refusals.js";
 import { settingOf } from "../setting/set-value.js";
 import { type Standing, type StandingOptions, standingOf } from "../setting/standing.js";
 import { opened, percent, plain } from "../words/amount.js";
@@ -46,11 +52,11 @@ export interface Sensitivity {
  * How an answer changes for one standard error and for ten per cent of each parameter, one at a time, and its
  * elasticity (central differences of a ten-thousandth).
  *
- * @throws {ModelError} `no-such-setting` | `outside-projection` | `unknown-name` | `risk-not-smooth`.
- * @example sensitivity(fitted, { periods: 12, answer: { time: "N", value: 600, direction: "rising" } }).rows.length // 3
+ * @throws {ModelError} `no-such-setting` | `outside-projection` | `unknown-name` | `probability-not-smooth`.
+ * @example sensitivity(fitted, { periods: 12, answer: { time: "N", risesTo: 600 } }).rows.length // 3
  */
 export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): Sensitivity {
-  if (isRisk(options.answer)) throw refuseRiskObjective();
+  if (isProbability(options.answer)) throw refuseProbabilityObjective();
   const standing = standingOf(subject, options);
   const read = measureReader(standing, options.answer);
   const answer = read(standing.ground);
@@ -61,14 +67,14 @@ export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): S
     "time" in options.answer
       ? standing.periodUnit
       : standing.unitOf(Object.values(options.answer)[0] as string);
-  return Object.freeze({
+  return {
     kind: "sensitivity",
     measure,
     unit,
     answer,
-    rows: Object.freeze(rows),
+    rows,
     sentence: sentenceOf(options.answer, answer, rows, standing),
-  });
+  };
 }
 
 function movable({ rule, fitGround }: Standing): readonly string[] {

@@ -17,11 +17,19 @@ export type Target = Measure &
     | { readonly atLeast: number; readonly is?: never; readonly atMost?: never }
   );
 
+/** A time by which something is to happen, or before which it is not, as a label of the record's periods. */
+export type DatedTarget = Extract<Measure, { readonly time: string }> &
+  (
+    | { readonly is: string; readonly atMost?: never; readonly atLeast?: never }
+    | { readonly atMost: string; readonly is?: never; readonly atLeast?: never }
+    | { readonly atLeast: string; readonly is?: never; readonly atMost?: never }
+  );
+
 /** Options of `solveFor`. */
 export interface SolveOptions extends StandingOptions {
   /** A parameter, a first value such as "N[0]", or an input whose usual level is sought. */
   readonly vary: string;
-  readonly until: Target;
+  readonly until: Target | DatedTarget;
   /** Lowest and highest value looked at; default a hundredth to a hundred times the present one, within its bounds. */
   readonly range?: readonly [number, number];
   /** The setting comes in multiples of this (0.01 for money, 1 for pieces): rounded to the side that meets the target. */
@@ -35,12 +43,12 @@ export interface Solution {
   /** Rounded to the multiple asked for. */
   readonly value: number;
   readonly exact: number;
-  /** The measure at `value`, with its Monte-Carlo error where it is a risk. */
+  /** The measure at `value`, with its Monte-Carlo error where it is simulated. */
   readonly achieved: number;
   readonly achievedError: number;
   /** Which side of the setting meets an `atMost` or `atLeast`. */
   readonly meets: "this value only" | "this value and above" | "this value and below";
-  /** From the uncertainty of a fit's parameters; absent for a rule, and where the measure is a risk, which carries it. */
+  /** From the uncertainty of a fit's parameters; absent for a rule, and where the measure is a probability, which carries it. */
   readonly margin: SettingMargin | undefined;
 }
 

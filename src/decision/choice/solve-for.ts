@@ -1,22 +1,22 @@
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import type { Rule } from "../../rule/index.js";
-import { isRisk, type Measure, measureWords } from "../measure/measure.js";
+import { isProbability, type Measure, measureWords } from "../measure/measure.js";
 import { measureReader } from "../measure/read-measure.js";
-import { type Estimated, riskReader } from "../measure/read-risk.js";
+import { type Estimated, probabilityReader } from "../measure/read-probability.js";
 import {
   refuseBounds,
   refuseNoEffect,
   refuseNoRange,
   refuseNoTarget,
   refusePastAlready,
-  refuseRiskTarget,
+  refuseProbabilityTarget,
 } from "../refusals.js";
 import { type Setting, settingOf } from "../setting/set-value.js";
 import { settingMargin } from "../setting/setting-margin.js";
 import { withUnplanned } from "../setting/setting-range.js";
 import { isFit, type Standing, standingOf } from "../setting/standing.js";
 import { opened } from "../words/amount.js";
-import type { Solution, Solved, SolveOptions, Target } from "./solution.js";
+import type { DatedTarget, Solution, Solved, SolveOptions, Target } from "./solution.js";
 import { pastAlready, signNotes } from "./solve-notes.js";
 import { solveSentence } from "./solve-sentence.js";
 import { type Roots, solveWithin } from "./solve-within.js";
@@ -25,11 +25,11 @@ import { type Roots, solveWithin } from "./solve-within.js";
  * Finds what a parameter, a first value or the level of an input must be, so that a measure of the projection meets a target.
  *
  * The range is looked over for every crossing, so several solutions, and none, are answers. For a fit each solution
- * has an interval from 400 draws of the parameters, each solved anew; a risk carries the parameters' uncertainty and
+ * has an interval from 400 draws of the parameters, each solved anew; a probability carries the parameters' uncertainty and
  * the random change itself.
  *
  * @param options.vary - its unit is that of the parameter, state or input.
- * @throws {ModelError} `no-such-setting` | `no-effect` | `past-already` | `risk-outside` | `no-range` | `bounds-contradict` | `no-target` |
+ * @throws {ModelError} `no-such-setting` | `no-effect` | `past-already` | `probability-outside` | `no-range` | `bounds-contradict` | `no-target` |
  *   `future-input-missing` | `outside-projection` | `unknown-name`.
  * @example
  * const loan = recurrence("owed[t+1] = owed*(1 + i) - payment", { fixed: { i: 0.01 } });
@@ -38,10 +38,11 @@ import { type Roots, solveWithin } from "./solve-within.js";
  * asked.solutions[0].value // 1000*0.01/(1 - 1.01**-12)
  */
 export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
-  const { vary: unknown, until, level = 0.95 } = options;
-  const aim = aimOf(until);
+  const { vary: unknown, level = 0.95 } = options;
   const setting = rangeable(subject, options);
   const standing = standingOf(subject, withUnplanned(subject, options, unknown, setting.between));
+  const until = numericTarget(options.until, standing);
+  const aim = aimOf(until);
   const found = settingOf(standing, unknown);
   const reader = readerOf(standing, until, found);
   const tolerance = options.multiple === undefined ? 0 : 0.01 * options.multiple;
@@ -50,8 +51,8 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
   const roots = solveWithin(excess, from, to, {
     tolerance,
     edge: until.is === undefined,
-    // A risk takes a whole run at every place.
-    ...(isRisk(until) && { looks: 12 }),
+    // A probability takes a whole run at every place.
+    ...(isProbability(until) && { looks: 12 }),
   });
   const everywhere = measuredWhereAllMeet(roots, aim, until);
   const past = pastAlready(standing, until, found);
@@ -77,7 +78,7 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
       .slice(0, 1)
       .flatMap(({ value, achieved }) => signNotes(standing, found, value, until, achieved)),
   ].join(" ");
-  return Object.freeze({ kind: "solution", ...answer, sentence });
+  return { kind: "solution", ...answer, sentence };
 }
 
 function rangeable(
@@ -87,18 +88,25 @@ function rangeable(
   if (between === undefined) return {};
   const [from, to] = between;
   const own = isFit(subject) ? subject.rule : subject;
-  const bounds = (isFit(subject) ? subject.options.bounds?.[unknown] : undefined) ?? own.bounds[unknown];
+  const bounds = isFit(subject) ? problemOf(subject).bounds(unknown) : own.bounds[unknown];
   if (!(from < to)) throw refuseBounds(unknown, from, to, "the first must be the smaller one");
   if (bounds !== undefined && (to < bounds[0] || from > bounds[1]))
     throw refuseBounds(unknown, from, to, `the rule admits ${bounds[0]} to ${bounds[1]}`);
   return { between };
 }
 
-/** The value asked for; of a risk between 0 and 1. */
+/** The value asked for; of a probability between 0 and 1. */
+/** A target whose label of a period is replaced by the time that measures are in. */
+function numericTarget(target: Target | DatedTarget, { timeOf }: Standing): Target {
+  const key = (["is", "atMost", "atLeast"] as const).find((each) => typeof target[each] === "string");
+  // Of the keys of a target only one is set.
+  return key === undefined ? (target as Target) : ({ ...target, [key]: timeOf(target[key]!) } as Target);
+}
+
 function aimOf(target: Target): number {
   const aim = target.is ?? target.atMost ?? target.atLeast;
   if (aim === undefined || !Number.isFinite(aim)) throw refuseNoTarget(aim);
-  if (isRisk(target) && !(aim >= 0 && aim <= 1)) throw refuseRiskTarget(aim);
+  if (isProbability(target) && !(aim >= 0 && aim <= 1)) throw refuseProbabilityTarget(aim);
   return aim;
 }
 
@@ -108,18 +116,18 @@ function measuredWhereAllMeet({ least, greatest }: Roots, aim: number, target: T
   return target.atLeast === undefined ? [aim + least, aim + greatest] : [aim - greatest, aim - least];
 }
 
-/** The same everywhere, and not because it can go no further: a risk of 0% or 100%, a time never reached. */
+/** The same everywhere, and not because it can go no further: a probability of 0% or 100%, a time never reached. */
 function hasNoEffect({ flat, least }: Roots, aim: number, target: Target): boolean {
   if (!flat || !Number.isFinite(least)) return false;
   const measure = aim + sidedExcess(target, least);
-  return !(isRisk(target) && (measure === 0 || measure === 1));
+  return !(isProbability(target) && (measure === 0 || measure === 1));
 }
 
 type Reader = (value: number) => Estimated;
 
 function readerOf(standing: Standing, measure: Measure, setting: Setting): Reader {
-  if (isRisk(measure)) {
-    const read = riskReader(standing, measure);
+  if (isProbability(measure)) {
+    const read = probabilityReader(standing, measure);
     return (value) => read(setting, value);
   }
   const read = measureReader(standing, measure);
@@ -160,7 +168,7 @@ function solutionAt(
     achieved: achieved.value,
     achievedError: achieved.error,
     meets: sided ? (above ? "this value and above" : "this value and below") : "this value only",
-    margin: isRisk(target)
+    margin: isProbability(target)
       ? undefined
       : settingMargin(standing, setting, target, root, options.level ?? 0.95),
   };

@@ -1,4 +1,4 @@
-import { centralPath, recordedSignWarnings } from "../../projection/index.js";
+import { centralPath, levelSide, recordedSignWarnings } from "../../projection/index.js";
 import type { Measure } from "../measure/measure.js";
 import type { Setting } from "../setting/set-value.js";
 import type { Standing } from "../setting/standing.js";
@@ -7,16 +7,16 @@ import type { Target } from "./solution.js";
 
 /** What is past its value at the start already, as a clause; undefined where nothing is, or the start itself is sought. */
 export function pastAlready(standing: Standing, target: Target, setting: Setting): string | undefined {
-  if (!("time" in target || "risk" in target)) return undefined;
-  const state = "time" in target ? target.time : target.risk;
+  if (!("time" in target || "probability" in target)) return undefined;
+  const state = "time" in target ? target.time : target.probability;
   const place = standing.rule.states.indexOf(state);
   if (place < 0 || setting.role === "initial") return undefined;
   const row = "time" in target ? 0 : standing.present;
   const now = centralPath(standing.ground).values[place]![row]!;
-  const falling = target.direction === "falling";
-  if (!(falling ? now <= target.value : now >= target.value)) return undefined;
+  const { value, sign } = levelSide(target);
+  if (!(sign * (now - value) >= 0)) return undefined;
   const unit = standing.unitOf(state);
-  return `${state} begins at ${amount(plain(now, 4), unit)}, already at or ${falling ? "below" : "above"} ${amount(plain(target.value, 12), unit)}`;
+  return `${state} begins at ${amount(plain(now, 4), unit)}, already at or ${sign < 0 ? "below" : "above"} ${amount(plain(value, 12), unit)}`;
 }
 
 /**
@@ -35,8 +35,7 @@ export function signNotes(
   if (fitGround === undefined || fit === undefined) return [];
   const ground = { ...fitGround, ...setting.at(value) };
   const last = lastRead(standing, measure, achieved);
-  const { unit } = fit.observations.period;
-  const period = (row: number): string => `${unit} ${plain(standing.timeAt(row), 6)}`;
+  const period = (row: number): string => standing.timeWords(standing.timeAt(row));
   const central = centralPath(ground);
   const scenario = `${setting.name} ${plain(value, 4)}`;
   return recordedSignWarnings({ central, ground, scenario, period, last }).map(({ message }) => message);

@@ -1,4 +1,4 @@
-import { isRisk, measuredClause, measuredWords, reachWords } from "../measure/measure.js";
+import { isProbability, measuredClause, measuredWords, reachWords } from "../measure/measure.js";
 import type { Standing } from "../setting/standing.js";
 import { amount, levelWords, plain, rounded } from "../words/amount.js";
 import { conditionWords } from "../words/record-words.js";
@@ -23,7 +23,7 @@ export function solveSentence(answer: Question, standing: Standing): string {
 /** A time that is to come no earlier than asked is said by the limit, as it may lie beyond the projection. */
 function broughtWords(target: Target, { achieved, achievedError }: Solution, standing: Standing): string {
   if ("time" in target && target.atLeast !== undefined)
-    return `${reachWords(target.time, target, standing)} not before ${standing.periodUnit} ${plain(target.atLeast, 5)}`;
+    return `${reachWords(target.time, target, standing)} not before ${standing.timeWords(target.atLeast)}`;
   return measuredClause(target, achieved, achievedError, standing);
 }
 
@@ -33,14 +33,14 @@ function everyWords(
   [least, greatest]: readonly [number, number],
   standing: Standing,
 ): string {
-  const risk = isRisk(target);
+  const simulated = isProbability(target);
   const said = (value: number): string => {
-    if (risk) return `${plain(100 * value, 3)}%`;
+    if (simulated) return `${plain(100 * value, 3)}%`;
     return Number.isFinite(value) ? measuredWords(target, value, 0, standing) : "never within the projection";
   };
   const same = Number.isFinite(least) ? `${said(least)} throughout` : said(least);
   const span = least === greatest ? same : `from ${said(least)} to ${said(greatest)}`;
-  return `Every ${unknown} looked at from ${rangeWords(range, unit)} meets the target: ${measure} is ${span}${risk ? " (simulated)" : ""}, provided ${conditionWords(standing.rule, standing.fit)}.`;
+  return `Every ${unknown} looked at from ${rangeWords(range, unit)} meets the target: ${measure} is ${span}${simulated ? " (simulated)" : ""}, provided ${conditionWords(standing.rule, standing.fit)}.`;
 }
 
 function rangeWords(between: Question["range"], unit: string): string {
@@ -74,15 +74,15 @@ function limitWords({ value, meets }: Solution, spread: number | undefined): str
   return rounded(Number(said) + outward * unit, spread);
 }
 
-/** Whether even the nearest miss is a risk that can lie no further off. */
-function endOfRisk({ target, nearest }: Question): boolean {
-  return isRisk(target) && nearest.achieved === (target.atMost === undefined ? 0 : 1);
+/** Whether even the nearest miss is a probability that can lie no further off. */
+function endOfProbability({ target, nearest }: Question): boolean {
+  return isProbability(target) && nearest.achieved === (target.atMost === undefined ? 0 : 1);
 }
 
 function unsolved(answer: Question, standing: Standing): string {
   const { vary: unknown, unit, range: between, measure, nearest, target } = answer;
   const range = rangeWords(between, unit);
-  if (endOfRisk(answer))
+  if (endOfProbability(answer))
     return `No ${unknown} looked at from ${range} brings ${measure} to the target: it is ${100 * nearest.achieved}% throughout (simulated).`;
   const miss = Number.isFinite(nearest.achieved)
     ? `the nearest is ${measuredWords(target, nearest.achieved, 0, standing)} with ${unknown} at ${amount(plain(nearest.value, 4), unit)}`

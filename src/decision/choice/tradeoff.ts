@@ -1,9 +1,9 @@
 import type { Fit } from "../../estimate/index.js";
 import type { Rule } from "../../rule/index.js";
-import { isRisk, type Measure, measuredWords, measureWords } from "../measure/measure.js";
+import { isProbability, type Measure, measuredWords, measureWords } from "../measure/measure.js";
 import { expectedReader } from "../measure/read-expected.js";
 import { measureReader } from "../measure/read-measure.js";
-import { type Estimated, riskReader } from "../measure/read-risk.js";
+import { type Estimated, probabilityReader } from "../measure/read-probability.js";
 import { refuseNoValues } from "../refusals.js";
 import { type Setting, settingOf } from "../setting/set-value.js";
 import { withUnplanned } from "../setting/setting-range.js";
@@ -39,7 +39,7 @@ export interface Tradeoff {
 }
 
 /**
- * Answers against a setting: time, cost and risk of each choice, all with the same random numbers.
+ * Answers against a setting: time, cost and probability of each choice, all with the same random numbers.
  *
  * @throws {ModelError} `no-such-setting` | `no-values` | `unknown-name` | `outside-projection` | `nothing-random`.
  * @example
@@ -63,8 +63,8 @@ export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeof
     const found = readers.map(({ shown, read }) => [shown, read(value)] as const);
     return {
       value,
-      answers: Object.fromEntries(found.map(([shown, risk]) => [shown, risk.value])),
-      errors: Object.fromEntries(found.map(([shown, risk]) => [shown, risk.error])),
+      answers: Object.fromEntries(found.map(([shown, each]) => [shown, each.value])),
+      errors: Object.fromEntries(found.map(([shown, each]) => [shown, each.error])),
     };
   });
   const measures = Object.fromEntries(
@@ -76,15 +76,15 @@ export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeof
       signNotes(standing, setting, row.value, measure, row.answers[shown]!),
     ),
   );
-  return Object.freeze({
+  return {
     kind: "tradeoff",
     vary: name,
     unit,
-    measures: Object.freeze(measures),
+    measures,
     answers,
-    rows: Object.freeze(rows),
+    rows,
     sentence: [sentenceOf(name, unit, rows, answers, standing), ...new Set(notes)].join(" "),
-  });
+  };
 }
 
 function valuesOf(values: TradeoffOptions["values"]): readonly number[] {
@@ -96,8 +96,8 @@ function valuesOf(values: TradeoffOptions["values"]): readonly number[] {
 
 /** Under random change what is expected is the mean over paths; times and parameters are those of the central path. */
 function readerOf(standing: Standing, setting: Setting, measure: Measure): (value: number) => Estimated {
-  if (isRisk(measure)) {
-    const read = riskReader(standing, measure);
+  if (isProbability(measure)) {
+    const read = probabilityReader(standing, measure);
     return (value) => read(setting, value);
   }
   const random = standing.change.some((noise) => noise !== undefined);

@@ -1,4 +1,4 @@
-import type { Direction } from "../../projection/index.js";
+import { type CrossedLevel, levelSide } from "../../projection/index.js";
 import { amount, percent, plain } from "../words/amount.js";
 
 /** Periods over which a measure is taken, counted from the present: 1 is the next one. Default: all. */
@@ -11,8 +11,8 @@ interface Window {
  * A number read off a projection. Names are states or quantities of the rule.
  *
  * `level`: a state `at` a period ahead. `average`, `total`, `lowest`, `highest`: over a window of periods. `time`: when
- * a state first reaches a value, in the unit of the period column. `risk`: the probability that it ever does within
- * the projection. `parameter`: a parameter of the rule itself.
+ * a state first rises or falls to a level, in the unit of the period column. `probability`: the chance that it ever
+ * does within the projection. `parameter`: a parameter of the rule itself.
  */
 export type Measure =
   | { readonly level: string; readonly at: number }
@@ -20,8 +20,8 @@ export type Measure =
   | ({ readonly total: string } & Window)
   | ({ readonly lowest: string } & Window)
   | ({ readonly highest: string } & Window)
-  | { readonly time: string; readonly value: number; readonly direction: Direction }
-  | { readonly risk: string; readonly value: number; readonly direction: Direction }
+  | ({ readonly time: string } & CrossedLevel)
+  | ({ readonly probability: string } & CrossedLevel)
   | { readonly parameter: string };
 
 /** What a measure does, with the name it is taken of. */
@@ -32,7 +32,7 @@ export type MeasureKind =
   | "lowest"
   | "highest"
   | "time"
-  | "risk"
+  | "probability"
   | "parameter";
 
 const kinds: readonly MeasureKind[] = [
@@ -42,7 +42,7 @@ const kinds: readonly MeasureKind[] = [
   "lowest",
   "highest",
   "time",
-  "risk",
+  "probability",
   "parameter",
 ];
 
@@ -53,12 +53,15 @@ export function measureOf(measure: Measure): { readonly kind: MeasureKind; reado
 }
 
 /** Whether a measure needs many paths. */
-export const isRisk = (measure: Measure): measure is Extract<Measure, { risk: string }> => "risk" in measure;
+export const isProbability = (measure: Measure): measure is Extract<Measure, { probability: string }> =>
+  "probability" in measure;
 
 /** Units that a measure's words need. */
 export interface MeasureUnits {
   readonly unitOf: (name: string) => string;
   readonly periodUnit: string;
+  /** A time of the period column: "month 120", or a label where periods have them. */
+  readonly timeWords: (time: number) => string;
 }
 
 /** A measure in words: "the average of stock over the next 26 weeks". */
@@ -67,17 +70,14 @@ export function measureWords(measure: Measure, units: MeasureUnits): string {
   if ("level" in measure) return `${name} ${measure.at} ${plural(units.periodUnit, measure.at)} ahead`;
   if (kind === "parameter") return name;
   if ("time" in measure) return `the time at which ${reachWords(name, measure, units)}`;
-  if ("risk" in measure) return `the risk that ${reachWords(name, measure, units)}`;
+  if ("probability" in measure) return `the probability that ${reachWords(name, measure, units)}`;
   return `the ${kind} of ${name}${windowWords(measure as Window, units)}`;
 }
 
 /** "owed falls to 0 EUR". */
-export function reachWords(
-  name: string,
-  { value, direction }: { readonly value: number; readonly direction: Direction },
-  { unitOf }: MeasureUnits,
-): string {
-  return `${name} ${direction === "falling" ? "falls" : "rises"} to ${amount(plain(value, 12), unitOf(name))}`;
+export function reachWords(name: string, level: CrossedLevel, { unitOf }: MeasureUnits): string {
+  const { value, sign } = levelSide(level);
+  return `${name} ${sign < 0 ? "falls" : "rises"} to ${amount(plain(value, 12), unitOf(name))}`;
 }
 
 function windowWords({ from, to }: Window, { periodUnit }: MeasureUnits): string {
@@ -102,8 +102,8 @@ export function measuredClause(measure: Measure, value: number, error: number, u
 
 /** A measure's value as a sentence writes it. */
 export function measuredWords(measure: Measure, value: number, error: number, units: MeasureUnits): string {
-  if (isRisk(measure)) return value === 0 ? "none in the draws made" : percent(value, error);
+  if (isProbability(measure)) return value === 0 ? "none in the draws made" : percent(value, error);
   const { kind, name } = measureOf(measure);
-  if (kind === "time") return `${units.periodUnit} ${plain(value, 5)}`;
+  if (kind === "time") return units.timeWords(value);
   return amount(plain(value, 5), units.unitOf(name));
 }

@@ -4,7 +4,7 @@ import type { Standing } from "../setting/standing.js";
 import { chanceRun } from "./chance-run.js";
 import { type Measure, measureOf } from "./measure.js";
 import { windowOf } from "./read-measure.js";
-import type { Estimated, EstimatedReader } from "./read-risk.js";
+import type { Estimated, EstimatedReader } from "./read-probability.js";
 
 /** How a path's value of a window is carried along. */
 const gathered = {

@@ -1,5 +1,5 @@
 import { centralPath, type Ground } from "../../projection/index.js";
-import { quantitiesAt, roughness } from "../../rule/index.js";
+import { nonsmoothCalls, quantitiesAt } from "../../rule/index.js";
 import { crossing } from "../reach/crossing.js";
 import { refuseMeasureName, refuseMeasureWindow } from "../refusals.js";
 import type { Standing } from "../setting/standing.js";
@@ -9,7 +9,7 @@ import { type Measure, measureOf } from "./measure.js";
 export type MeasureReader = (ground: Ground) => number;
 
 /**
- * A reader of a measure other than a risk. A time that is never reached within the projection is infinite.
+ * A reader of a measure other than a probability. A time that is never reached within the projection is infinite.
  *
  * @throws {ModelError} `unknown-name` | `outside-projection`.
  */
@@ -72,11 +72,11 @@ function timeReader(
   measure: Extract<Measure, { time: string }>,
   column: (ground: Ground) => readonly number[],
 ): MeasureReader {
-  const { kinks, jumps } = roughness(standing.rule);
+  const { kinks, jumps } = nonsmoothCalls(standing.rule);
   const smooth = standing.rule.inputs.length === 0 && kinks.length + jumps.length === 0;
   return (ground) => {
     const path = column(ground);
-    const at = crossing(path, 0, path.length, measure.value, measure.direction, smooth);
+    const at = crossing(path, 0, path.length, measure, smooth);
     if (at === undefined) return Number.POSITIVE_INFINITY;
     return standing.timeAt(smooth ? at.between : at.period);
   };

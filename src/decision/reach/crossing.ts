@@ -1,4 +1,4 @@
-import type { Direction } from "../../projection/index.js";
+import { type CrossedLevel, levelSide } from "../../projection/index.js";
 import { periodsFromFirst } from "./between-periods.js";
 
 /** Where a path first reaches a value. */
@@ -10,7 +10,7 @@ export interface Crossing {
 }
 
 /**
- * First place at which a path is at or past a value, from below (`rising`) or from above (`falling`).
+ * First place at which a path is at or past a level.
  *
  * @param path - read from `offset`, `length` values; NaN is no value.
  * @param smooth - whether the path is free of random change and kinks, so that a curve joins its values.
@@ -20,11 +20,10 @@ export function crossing(
   path: ArrayLike<number>,
   offset: number,
   length: number,
-  value: number,
-  direction: Direction,
+  level: CrossedLevel,
   smooth: boolean,
 ): Crossing | undefined {
-  const sign = direction === "rising" ? 1 : -1;
+  const { value, sign } = levelSide(level);
   for (let t = 0; t < length; t++) {
     const here = sign * (path[offset + t]! - value);
     if (!(here >= 0)) continue;

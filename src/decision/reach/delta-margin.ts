@@ -1,4 +1,4 @@
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import { studentQuantile } from "../../numeric/index.js";
 import { type CentralPath, centralPath, type FitGround } from "../../projection/index.js";
 
@@ -23,7 +23,7 @@ export function deltaMargin(
 ): DeltaMargin | undefined {
   const { group } = ground;
   const centre = read(centralPath(ground));
-  if (centre === undefined || fit.options.errors !== "observation") return undefined;
+  if (centre === undefined || !problemOf(fit).group(group.group).beginning().fromStart) return undefined;
   const slopes: number[] = [];
   for (let i = 0; i < group.estimates.length; i++) {
     const error = group.estimates[i]!.standardError;

@@ -15,19 +15,19 @@ export function drawnPassages(
   question: ReachQuestion,
   smooth: boolean,
 ): Float64Array {
-  const { state, value, direction, margin } = question;
+  const { state, margin } = question;
   const watched = group.passages.find(
-    (each) => each.state === state && each.value === value && each.direction === direction,
+    (each) => each.state === state && each.risesTo === question.risesTo && each.fallsTo === question.fallsTo,
   );
   const kept = margin === "parameters" ? group.ensemble.mean[place] : group.ensemble.future[place];
   if (kept === undefined) {
-    if (watched === undefined) throw refuseNotWatched(state, value, direction);
+    if (watched === undefined) throw refuseNotWatched(state, question);
     return watched.at.slice().sort();
   }
   const length = group.index.length;
   const curved = smooth && margin === "parameters";
   return Float64Array.from({ length: group.ensemble.paths }, (_, path) => {
-    const at = crossing(kept, path * length, length, value, direction, curved);
+    const at = crossing(kept, path * length, length, question, curved);
     return at === undefined ? Number.POSITIVE_INFINITY : at.between;
   }).sort();
 }

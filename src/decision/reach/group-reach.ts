@@ -1,6 +1,12 @@
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import { quantile } from "../../numeric/index.js";
-import { type Forecast, fitGround, type GroupForecast, type Simulation } from "../../projection/index.js";
+import {
+  type Forecast,
+  fitGround,
+  type GroupForecast,
+  levelSide,
+  type Simulation,
+} from "../../projection/index.js";
 import { plain } from "../words/amount.js";
 import { crossing } from "./crossing.js";
 import { type DeltaMargin, deltaMargin } from "./delta-margin.js";
@@ -16,11 +22,11 @@ export function groupReach(
   question: ReachQuestion,
   smooth: boolean,
 ): Omit<GroupReach, "sentence"> {
-  const { value, direction, level, state } = question;
+  const { level, state } = question;
   const length = group.index.length;
   const place = group.states.findIndex((each) => each.state === state);
   const found = drawnPassages(group, place, question, smooth);
-  const central = crossing(group.states[place]!.central, 0, length, value, direction, smooth);
+  const central = crossing(group.states[place]!.central, 0, length, question, smooth);
   const recorded = ahead.kind === "forecast" ? recordedPast(ahead.fit, group, question) : undefined;
   const beginsPast = central?.period === 0;
   const rows = {
@@ -29,8 +35,8 @@ export function groupReach(
     lower: beginsPast ? undefined : limit(found, (1 - level) / 2),
     upper: beginsPast ? undefined : limit(found, (1 + level) / 2),
   };
-  const draws = found.length;
-  const never = found.filter((at) => at === Number.POSITIVE_INFINITY).length / draws;
+  const paths = found.length;
+  const never = found.filter((at) => at === Number.POSITIVE_INFINITY).length / paths;
   return {
     group: group.group,
     scenario: group.scenario,
@@ -43,11 +49,11 @@ export function groupReach(
     median: beginsPast ? undefined : timeOf(group, limit(found, 0.5)),
     meanPath: beginsPast ? undefined : meanPath(ahead, group, question, smooth),
     never,
-    neverError: Math.sqrt((never * (1 - never)) / draws),
-    draws,
+    neverError: Math.sqrt((never * (1 - never)) / paths),
+    paths,
     distribution: beginsPast ? [] : distributionOf(group, found),
     tendsTo: central === undefined ? levelling(group, place, level) : undefined,
-    horizon: group.time[length - 1]!,
+    lastPeriod: group.time[length - 1]!,
     words: { ...wordsOf(group, question, rows), recorded: recorded?.words },
   };
 }
@@ -72,7 +78,7 @@ function wordsOf(
     firstPeriod: firstPeriod === undefined ? undefined : say.period(firstPeriod),
     lower: lower === undefined ? undefined : say.limit(lower, "lower", spread),
     upper: upper === undefined ? undefined : say.limit(upper, "upper", spread),
-    horizon: say.period(group.index.length - 1),
+    lastPeriod: say.period(group.index.length - 1),
   };
 }
 
@@ -86,13 +92,14 @@ function spreadOf({ time, lower, upper }: Rows): number | undefined {
 function recordedPast(
   fit: Fit,
   group: GroupForecast,
-  { state, value, direction, periodUnit }: ReachQuestion,
+  question: ReachQuestion,
 ): { readonly time: number; readonly words: string } | undefined {
   const { values, time, labels } = fit.observations.groups.find((each) => each.name === group.group)!;
-  const sign = direction === "rising" ? 1 : -1;
+  const { state, periodUnit } = question;
+  const { value, sign } = levelSide(question);
   const at = values[state]!.findIndex((each) => sign * (each - value) >= 0);
   // A record that reads the state through an unknown factor is on another scale.
-  if (at <= 0 || fit.options.factor?.[state] !== undefined) return undefined;
+  if (at <= 0 || problemOf(fit).readByFactor.includes(state)) return undefined;
   return { time: time[at]!, words: labels?.[at] ?? `${periodUnit} ${plain(time[at]!, 6)}` };
 }
 
@@ -105,11 +112,11 @@ function meanPath(
   if (ahead.kind === "simulation") return undefined;
   const { fit, options } = ahead;
   const fitted = fit.groups.find((each) => each.group === group.group)!;
-  const ground = fitGround(fit, fitted, options.periods, group.plans);
+  const ground = fitGround(fit, fitted, options.periods, group.plans, group.recordEnd);
   const place = fit.rule.states.indexOf(question.state);
   return deltaMargin(fit, ground, question.level, ({ values }) => {
     const path = values[place]!;
-    const at = crossing(path, 0, path.length, question.value, question.direction, smooth);
+    const at = crossing(path, 0, path.length, question, smooth);
     return timeOf(group, at?.between);
   });
 }

@@ -1,4 +1,4 @@
-import type { Forecast, Simulation } from "../../projection/index.js";
+import { type Forecast, levelSide, type Simulation } from "../../projection/index.js";
 import { amount, levelWords, opened, percent, plain, rounded, shareOfDraws } from "../words/amount.js";
 import { conditionWords, groupWords } from "../words/record-words.js";
 import type { AcrossUnits } from "./across-units.js";
@@ -54,7 +54,7 @@ function byGroup(ahead: Ahead, groups: readonly GroupReach[], question: ReachQue
   const last = there[there.length - 1];
   const { state } = question;
   if (first === undefined || last === undefined)
-    return `${state} reaches ${target(question)} in none of ${groups.length} groups by ${groups[0]!.words.horizon}`;
+    return `${state} reaches ${target(question)} in none of ${groups.length} groups by ${groups[0]!.words.lastPeriod}`;
   const when1 = (group: GroupReach, short: boolean): string =>
     group.words.recorded === undefined
       ? when(group, question, short)
@@ -67,7 +67,7 @@ function byGroup(ahead: Ahead, groups: readonly GroupReach[], question: ReachQue
   const missing = groups.filter((group) => group.time === undefined && !group.beginsPast);
   if (passed.length > 0) return `${span}; ${passed.map(who).join(" and ")} began past it`;
   if (missing.length > 0)
-    return `${span}; ${missing.map(who).join(" and ")} ${missing.length === 1 ? "does" : "do"} not get there by ${missing[0]!.words.horizon}`;
+    return `${span}; ${missing.map(who).join(" and ")} ${missing.length === 1 ? "does" : "do"} not get there by ${missing[0]!.words.lastPeriod}`;
   const latest = there.reduce((late, next) => (next.firstPeriod! > late.firstPeriod! ? next : late));
   return `${span}; the first period at which all ${groups.length} are at or past it is ${latest.words.firstPeriod}`;
 }
@@ -82,10 +82,10 @@ function byScenario(ahead: Ahead, groups: readonly GroupReach[], question: Reach
 
 function scenarioWords(group: GroupReach, question: ReachQuestion): string {
   if (group.beginsPast) return "not at all, as it begins past it";
-  const { never, neverError, draws, words } = group;
-  if (group.time === undefined && draws > 1 && never < 1)
-    return `by ${words.horizon} ${shareOfDraws(1 - never, neverError, draws)} only`;
-  if (group.time === undefined) return `not by ${words.horizon}`;
+  const { never, neverError, paths, words } = group;
+  if (group.time === undefined && paths > 1 && never < 1)
+    return `by ${words.lastPeriod} ${shareOfDraws(1 - never, neverError, paths)} only`;
+  if (group.time === undefined) return `not by ${words.lastPeriod}`;
   return `${when(group, question, true)}${firstWords(group)}`;
 }
 
@@ -93,20 +93,20 @@ function alreadyThere(ahead: Ahead, answer: Answer, question: ReachQuestion): st
   const who = subject(ahead, answer, question);
   if (answer.words.recorded !== undefined)
     return `${who} is already recorded at or past ${target(question)}, at ${answer.words.recorded}`;
-  const [side, other] = question.direction === "falling" ? ["below", "rising"] : ["above", "falling"];
-  return `${who} is at or ${side} ${target(question)} from the first row on, so there is no time at which it gets there (was direction: "${other}" meant?)`;
+  const [side, other] = levelSide(question).sign < 0 ? ["below", "risesTo"] : ["above", "fallsTo"];
+  return `${who} is at or ${side} ${target(question)} from the first row on, so there is no time at which it gets there (was \`${other}\` meant?)`;
 }
 
 function notReached(ahead: Ahead, answer: Answer, question: ReachQuestion): string {
-  const { tendsTo, draws, words, never, neverError } = answer;
-  if (question.margin === "random change" && draws > 1 && never < 1)
-    return `the chance that ${subject(ahead, answer, question)} reaches ${target(question)} by ${words.horizon} is ${percent(1 - never, neverError)} (Monte-Carlo error ${percent(neverError, neverError / 3)}); without random change it does not`;
+  const { tendsTo, paths, words, never, neverError } = answer;
+  if (question.margin === "random change" && paths > 1 && never < 1)
+    return `the chance that ${subject(ahead, answer, question)} reaches ${target(question)} by ${words.lastPeriod} is ${percent(1 - never, neverError)} (Monte-Carlo error ${percent(neverError, neverError / 3)}); without random change it does not`;
   const levels = tendsTo === undefined ? "" : `; the path levels off near ${levelledAt(tendsTo, question)}`;
   const some =
-    answer.never === 1 || draws === 1
+    answer.never === 1 || paths === 1
       ? ""
-      : `; ${shareOfDraws(1 - answer.never, answer.neverError, draws)} it does`;
-  return `${subject(ahead, answer, question)} does not reach ${target(question)} by ${words.horizon}${levels}${some}`;
+      : `; ${shareOfDraws(1 - answer.never, answer.neverError, paths)} it does`;
+  return `${subject(ahead, answer, question)} does not reach ${target(question)} by ${words.lastPeriod}${levels}${some}`;
 }
 
 function levelledAt(tends: NonNullable<Answer["tendsTo"]>, question: ReachQuestion): string {
@@ -121,17 +121,17 @@ function subject(ahead: Ahead, { group, scenario }: Answer, { state }: ReachQues
   return group === "" ? `${under}${state}` : `${under}${state} in ${groupWords(fitOf(ahead), group)}`;
 }
 
-function target({ value, unit }: ReachQuestion): string {
-  return amount(plain(value, 12), unit);
+function target(question: ReachQuestion): string {
+  return amount(plain(levelSide(question).value, 12), question.unit);
 }
 
 /** "at hour 129 (95% interval 125 to 146)". */
-function when({ words, draws }: Answer, { level }: ReachQuestion, short = false): string {
-  const { time, lower, upper, horizon } = words;
-  if (draws === 1) return `${time}`;
+function when({ words, paths }: Answer, { level }: ReachQuestion, short = false): string {
+  const { time, lower, upper, lastPeriod } = words;
+  if (paths === 1) return `${time}`;
   const name = short ? "" : `${levelWords(level)} interval `;
-  if (lower === undefined) return `${time} (${name}with no limit by ${horizon})`;
-  if (upper === undefined) return `${time} (${name}from ${lower}, with no upper limit by ${horizon})`;
+  if (lower === undefined) return `${time} (${name}with no limit by ${lastPeriod})`;
+  if (upper === undefined) return `${time} (${name}from ${lower}, with no upper limit by ${lastPeriod})`;
   return `${time} (${name}${lower} to ${upper})`;
 }
 
@@ -143,8 +143,8 @@ function firstWords({ time, firstPeriod, words }: Answer): string {
 
 function neverWords(answer: Answer): string {
   if (answer.never === 0) return "";
-  const share = shareOfDraws(answer.never, answer.neverError, answer.draws);
-  return `; ${share} it does not get there by ${answer.words.horizon}`;
+  const share = shareOfDraws(answer.never, answer.neverError, answer.paths);
+  return `; ${share} it does not get there by ${answer.words.lastPeriod}`;
 }
 
 /** For a new unit, within what the forecast covers. */
@@ -169,8 +169,8 @@ function condition(ahead: Ahead): string {
   return conditionWords(ahead.kind === "simulation" ? ahead.rule : ahead.fit.rule, fitOf(ahead));
 }
 
-function marginWords({ margin }: ReachQuestion, { draws, time }: Answer): string {
-  if (draws === 1 || time === undefined) return "";
+function marginWords({ margin }: ReachQuestion, { paths, time }: Answer): string {
+  if (paths === 1 || time === undefined) return "";
   if (margin === "parameters")
     return " The margin is that of the fitted parameters, not of a further reading's error.";
   if (margin === "random change") return " The margin is that of the random change, at the given parameters.";

@@ -1,19 +1,16 @@
-import type { Direction } from "../../projection/index.js";
+import type { CrossedLevel } from "../../projection/index.js";
 import type { AcrossUnits } from "./across-units.js";
 import type { DeltaMargin } from "./delta-margin.js";
 
-/** The question: when does a state get to a value? */
-export interface TimeToReachOptions {
+/** The question: when does a state rise or fall to a level? */
+export type TimeToReachOptions = CrossedLevel & {
   /** Default: the only state. */
   readonly state?: string;
-  /** In the state's unit. */
-  readonly value: number;
-  readonly direction: Direction;
   /** Level of the interval; default 0.95. */
   readonly level?: number;
   /** Say as well when a new unit would get there, the variance between units added; from three groups on. */
   readonly newUnit?: boolean;
-}
+};
 
 /** The answer for one group and scenario. Times are in the unit of the period column. */
 export interface GroupReach {
@@ -38,14 +35,13 @@ export interface GroupReach {
   /** Share of draws that never get there within the forecast, and its Monte-Carlo error. */
   readonly never: number;
   readonly neverError: number;
-  /** How many draws. */
-  readonly draws: number;
+  readonly paths: number;
   /** By period that some draw reaches first: its share of draws, and the share that is there by then. */
   readonly distribution: readonly { readonly time: number; readonly share: number; readonly by: number }[];
   /** Where the path no longer moves at the end of the forecast: the level it tends to, with the band of the level. */
   readonly tendsTo: { readonly value: number; readonly lower: number; readonly upper: number } | undefined;
-  /** Last time the forecast covers. */
-  readonly horizon: number;
+  /** Last period that the forecast covers. */
+  readonly lastPeriod: number;
   /** The times in words: with the period's unit, or as dates where the record has them. */
   readonly words: {
     readonly time: string | undefined;
@@ -53,21 +49,19 @@ export interface GroupReach {
     readonly lower: string | undefined;
     readonly upper: string | undefined;
     readonly recorded: string | undefined;
-    readonly horizon: string;
+    readonly lastPeriod: string;
   };
   readonly sentence: string;
 }
 
 /** When a state reaches a value, with its margin. */
-export interface TimeToReach {
+export type TimeToReach = CrossedLevel & {
   readonly kind: "time-to-reach";
-  /** The rule's text. */
+  /** The rule by its name, or by its lines. */
   readonly rule: string;
   readonly state: string;
   readonly unit: string;
   readonly periodUnit: string;
-  readonly value: number;
-  readonly direction: Direction;
   readonly level: number;
   /** What the margin carries. */
   readonly margin: "parameters" | "parameters and process errors" | "random change";
@@ -75,7 +69,8 @@ export interface TimeToReach {
   /** Where asked for: over the units of the record, their mean, and a new unit. */
   readonly across: AcrossUnits | undefined;
   readonly sentence: string;
-}
+};
 
 /** A question with its defaults filled in. */
-export type ReachQuestion = Omit<TimeToReach, "kind" | "groups" | "across" | "sentence">;
+export type ReachQuestion = CrossedLevel &
+  Pick<TimeToReach, "rule" | "state" | "unit" | "periodUnit" | "level" | "margin">;

@@ -1,5 +1,6 @@
-import type { Forecast, Simulation } from "../../projection/index.js";
-import { type Rule, roughness } from "../../rule/index.js";
+import { problemOf } from "../../estimate/index.js";
+import { crossedLevel, type Forecast, levelSide, type Simulation } from "../../projection/index.js";
+import { nonsmoothCalls, type Rule, ruleLabel } from "../../rule/index.js";
 import { refuseFewUnits, refuseLevel, refuseStateUnknown, refuseTarget } from "../refusals.js";
 import { acrossUnits } from "./across-units.js";
 import { groupReach } from "./group-reach.js";
@@ -18,7 +19,7 @@ import { groupSentence, reachSentence } from "./reach-sentence.js";
  * straight line where the rule has kinks, its path turns, or chance moves it.
  *
  * @throws {ModelError} `unknown-state` | `target-not-finite` | `level-outside` | `paths-not-kept` | `too-few-units`.
- * @example timeToReach(forecast(fitted, { periods: 20 }), { value: 120, direction: "rising" }).sentence;
+ * @example timeToReach(forecast(fitted, { periods: 20 }), { risesTo: 120 }).sentence;
  */
 export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOptions): TimeToReach {
   const rule = ruleOf(ahead);
@@ -26,19 +27,19 @@ export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOp
   const smooth = rule.inputs.length === 0 && isSmooth(rule);
   const groups = ahead.groups.map((group) => {
     const answer = groupReach(ahead, group, question, smooth);
-    return Object.freeze({ ...answer, sentence: groupSentence(ahead, answer, question) });
+    return { ...answer, sentence: groupSentence(ahead, answer, question) };
   });
   const asked = options.newUnit === true && ahead.kind === "forecast";
   if (asked && groups.length < 3) throw refuseFewUnits(groups.length);
   const across = asked ? acrossUnits(groups, question.level) : undefined;
   const sentence = reachSentence(ahead, groups, across, question);
-  return Object.freeze({
+  return {
     kind: "time-to-reach",
     ...question,
-    groups: Object.freeze(groups),
+    groups,
     across,
     sentence,
-  });
+  };
 }
 
 function ruleOf(ahead: Forecast | Simulation): Rule {
@@ -46,23 +47,23 @@ function ruleOf(ahead: Forecast | Simulation): Rule {
 }
 
 function isSmooth(rule: Rule): boolean {
-  const { kinks, jumps } = roughness(rule);
+  const { kinks, jumps } = nonsmoothCalls(rule);
   return kinks.length === 0 && jumps.length === 0;
 }
 
 function questionOf(ahead: Forecast | Simulation, rule: Rule, options: TimeToReachOptions): ReachQuestion {
-  const { value, direction, level = 0.95, state = rule.states[0]! } = options;
+  const { level = 0.95, state = rule.states[0]! } = options;
+  const { value } = levelSide(options);
   if (!rule.states.includes(state)) throw refuseStateUnknown(state, rule.states);
   if (!Number.isFinite(value)) throw refuseTarget(value);
   if (!(level > 0 && level < 1)) throw refuseLevel(level);
-  const period = ahead.kind === "forecast" ? ahead.fit.observations.period.unit : ahead.options.period;
+  const period = ahead.kind === "forecast" ? ahead.fit.observations.axis.unit : ahead.options.period;
   return {
-    rule: rule.text,
+    rule: ruleLabel(rule),
     state,
     unit: ahead.groups[0]!.states.find((each) => each.state === state)!.unit,
     periodUnit: period,
-    value,
-    direction,
+    ...crossedLevel(options),
     level,
     margin: marginOf(ahead),
   };
@@ -70,5 +71,6 @@ function questionOf(ahead: Forecast | Simulation, rule: Rule, options: TimeToRea
 
 function marginOf(ahead: Forecast | Simulation): TimeToReach["margin"] {
   if (ahead.kind === "simulation") return "random change";
-  return ahead.fit.options.errors === "observation" ? "parameters" : "parameters and process errors";
+  const { change } = problemOf(ahead.fit).group(ahead.groups[0]!.group).noise;
+  return change.every((noise) => noise === undefined) ? "parameters" : "parameters and process errors";
 }

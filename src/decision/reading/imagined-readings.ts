@@ -1,6 +1,6 @@
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, type FittedNoise, problemOf, type Scale } from "../../estimate/index.js";
 import { quantile, type RandomStream, randomStream } from "../../numeric/index.js";
-import { centralPath, fittedNoise, type Ground, noiseDraw } from "../../projection/index.js";
+import { centralPath, type Ground, noiseDraw } from "../../projection/index.js";
 import { drawnGrounds } from "../setting/setting-margin.js";
 import { type Standing, standingOf } from "../setting/standing.js";
 
@@ -12,8 +12,7 @@ export interface ImaginedReadings {
   readonly centres: readonly Float64Array[];
   /** [rows]: scatter of a reading around it; with errors in the process it grows from the present on. */
   readonly scatter: Float64Array;
-  /** From the fitting scale to the record's. */
-  readonly logarithm: boolean;
+  readonly scale: Scale;
 }
 
 /** What is imagined of a fit. */
@@ -30,32 +29,31 @@ export interface ImagineOptions {
 export function imaginedReadings(fit: Fit, options: ImagineOptions): ImaginedReadings {
   const { state, draws, replicates, seed, group, periods } = options;
   const standing = standingOf(fit, { periods, seed, ...(group !== undefined && { group }) });
-  const logarithm = fit.options.distribution === "lognormal";
-  const scale = (value: number): number => (logarithm ? Math.log(value) : value);
+  const { scale } = problemOf(fit);
   const grounds = drawnGrounds(standing, draws);
-  const centres = grounds.map((ground) => Float64Array.from(centralPath(ground).values[state]!, scale));
-  const { reading } = fittedNoise(fit, standing.fitGround!.group);
+  const centres = grounds.map((ground) => Float64Array.from(centralPath(ground).values[state]!, scale.to));
+  const { reading, change } = problemOf(fit).group(standing.fitGround!.group.group).noise;
   const noise = reading[state];
   const rows = standing.ground.periods + 1;
   const alone = noise !== undefined && "sd" in noise ? noise.sd / Math.sqrt(replicates) : undefined;
   const scatter =
     alone === undefined
-      ? processScatter(fit, standing, grounds, centres, state, scale, randomStream(seed).jump())
+      ? processScatter(change, standing, grounds, centres, state, scale, randomStream(seed).jump())
       : new Float64Array(rows).fill(alone);
-  return { standing, grounds, centres, scatter, logarithm };
+  return { standing, grounds, centres, scatter, scale };
 }
 
 /** Scatter of single values around their draw's path, from one noisy run of every draw. */
 function processScatter(
-  fit: Fit,
+  change: FittedNoise["change"],
   standing: Standing,
   grounds: readonly Ground[],
   centres: readonly Float64Array[],
   state: number,
-  scale: (value: number) => number,
+  scale: Scale,
   stream: RandomStream,
 ): Float64Array {
-  const draws = fittedNoise(fit, standing.fitGround!.group).change.map((noise) => noise && noiseDraw(noise));
+  const draws = change.map((noise) => noise && noiseDraw(noise));
   const rows = standing.ground.periods + 1;
   const offsets = Array.from({ length: rows }, () => new Float64Array(grounds.length));
   grounds.forEach((ground, k) => {
@@ -63,7 +61,7 @@ function processScatter(
     for (let t = 1; t < rows; t++) {
       ground.compiled.step(at, ground.parameters, ground.inputs, ground.from + t - 1, at);
       for (let s = 0; s < draws.length; s++) at[s] = draws[s]?.(at[s]!, stream) ?? at[s]!;
-      offsets[t]![k] = scale(at[state]!) - centres[k]![t]!;
+      offsets[t]![k] = scale.to(at[state]!) - centres[k]![t]!;
     }
   });
   // The middle two thirds of the offsets stand for one standard deviation on either side, whatever a few wild paths do.

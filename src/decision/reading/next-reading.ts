@@ -1,9 +1,15 @@
 import type { Fit } from "../../estimate/index.js";
 import { randomStream } from "../../numeric/index.js";
-import { isRisk, type Measure, measureWords } from "../measure/measure.js";
+import type { PeriodAxis } from "../../record/index.js";
+import { isProbability, type Measure, measureWords } from "../measure/measure.js";
 import { measureReader } from "../measure/read-measure.js";
-import { refuseNoCandidate, refuseNoPurpose, refuseRiskObjective, refuseStateUnknown } from "../refusals.js";
-import { amount, percent, plain } from "../words/amount.js";
+import {
+  refuseNoCandidate,
+  refuseNoPurpose,
+  refuseProbabilityObjective,
+  refuseStateUnknown,
+} from "../refusals.js";
+import { percent, plain } from "../words/amount.js";
 import { type ImaginedReadings, imaginedReadings } from "./imagined-readings.js";
 import { narrowingAt } from "./narrowing.js";
 import { separationAt } from "./separation.js";
@@ -12,8 +18,10 @@ import { separationAt } from "./separation.js";
 export interface NextReadingOptions {
   /** Periods beyond the record up to which a reading could be taken, and up to which the answer looks. */
   readonly periods: number;
-  /** Times at which it could be taken, in the unit of the period column; default every period from the first on. */
-  readonly values?: readonly number[] | { readonly from: number; readonly to: number };
+  /** Periods at which it could be taken, by number or label; default every period from the first on. */
+  readonly values?:
+    | readonly (number | string)[]
+    | { readonly from: number | string; readonly to: number | string };
   /** The answer whose margin is to be narrowed; needed for a single fit. */
   readonly answer?: Measure;
   /** What is read; default the first state. */
@@ -49,7 +57,9 @@ export interface NextReading {
   readonly purpose: "narrow the answer" | "tell the rules apart";
   readonly state: string;
   readonly replicates: number;
-  readonly periodUnit: string;
+  readonly axis: PeriodAxis;
+  /** Time of period 0 of the axis. */
+  readonly zero: number;
   /** By time. */
   readonly choices: readonly ReadingChoice[];
   readonly recommended: ReadingChoice;
@@ -63,7 +73,7 @@ export interface NextReading {
  * weighed by how well they foretell it. Nothing is refitted; the Monte-Carlo error is given with each gain.
  *
  * @param fits - one fit with `answer`, or several fits of the same record.
- * @throws {ModelError} `no-purpose` | `no-candidate` | `unknown-state` | `risk-not-smooth` | `future-input-missing`.
+ * @throws {ModelError} `no-purpose` | `no-candidate` | `unknown-state` | `probability-not-smooth` | `future-input-missing`.
  * @example nextReading(fitted, { periods: 10, answer: { parameter: "K" } }).purpose // "narrow the answer"
  */
 export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOptions): NextReading {
@@ -71,7 +81,7 @@ export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOpti
   const [first] = all;
   const { answer, replicates = 1, seed = 1, paths: draws = 1000, periods, cost = () => 1 } = options;
   if (first === undefined || (all.length === 1 && answer === undefined)) throw refuseNoPurpose();
-  if (answer !== undefined && isRisk(answer)) throw refuseRiskObjective();
+  if (answer !== undefined && isProbability(answer)) throw refuseProbabilityObjective();
   const state = options.state ?? first.rule.states[0]!;
   const group = options.group === undefined ? {} : { group: options.group };
   const rivals = all.map((fit) => {
@@ -92,12 +102,17 @@ export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOpti
     purpose: separating ? ("tell the rules apart" as const) : ("narrow the answer" as const),
     state,
     replicates,
-    periodUnit: standing.periodUnit,
-    choices: Object.freeze(choices),
+    axis: standing.axis,
+    zero: standing.zero,
+    choices,
     recommended: best,
   };
   const about = separating ? "" : measureWords(answer, standing);
-  return Object.freeze({ kind: "next-reading", ...found, sentence: sentenceOf(found, about, rivals.length) });
+  return {
+    kind: "next-reading",
+    ...found,
+    sentence: sentenceOf(found, standing.timeWords(best.time), about, rivals.length),
+  };
 }
 
 /** What a reading brings, by its row in every rival's path. */
@@ -139,20 +154,21 @@ function candidates(
   when: NextReadingOptions["values"],
 ): readonly { readonly time: number; readonly rows: readonly number[] }[] {
   const { standing } = rivals[0]!;
-  const process = rivals.some((rival) => rival.standing.fit!.options.errors !== "observation");
+  const process = rivals.some(({ standing: { change } }) => change.some((noise) => noise !== undefined));
   const times = Array.from({ length: standing.ground.periods + 1 }, (_, row) => standing.timeAt(row));
   const wanted = (time: number): boolean => {
     if (when === undefined) return true;
     return "from" in when
-      ? time >= when.from && time <= when.to
-      : when.some((each) => Math.abs(each - time) < 1e-9);
+      ? time >= standing.timeOf(when.from) && time <= standing.timeOf(when.to)
+      : when.some((each) => Math.abs(standing.timeOf(each) - time) < 1e-9);
   };
   const found = times.filter(wanted).flatMap((time) => {
     const rows = rivals.map((rival) => rowAt(rival, time));
     const ahead = rows.every((row, i) => row > rivals[i]!.standing.present);
     return rows.every((row) => row >= 0) && (ahead || !process) ? [{ time, rows }] : [];
   });
-  if (found.length === 0) throw refuseNoCandidate(times[0]!, times[times.length - 1]!);
+  if (found.length === 0)
+    throw refuseNoCandidate(standing.timeWords(times[0]!), standing.timeWords(times[times.length - 1]!));
   return found;
 }
 
@@ -162,10 +178,15 @@ function rowAt({ standing }: ImaginedReadings, time: number): number {
   return -1;
 }
 
-function sentenceOf(found: Omit<NextReading, "kind" | "sentence">, about: string, rules: number): string {
-  const { recommended: best, replicates, periodUnit, state, purpose, choices } = found;
+function sentenceOf(
+  found: Omit<NextReading, "kind" | "sentence">,
+  time: string,
+  about: string,
+  rules: number,
+): string {
+  const { recommended: best, replicates, state, purpose, choices } = found;
   const what = replicates === 1 ? `A reading of ${state}` : `${replicates} readings of ${state}`;
-  const at = `at ${amount(`${periodUnit} ${plain(best.time, 6)}`, "")}`;
+  const at = `at ${time}`;
   const among = `of the ${choices.length} times looked at`;
   const error = `Monte-Carlo error ${percent(best.error, best.error / 3)}`;
   if (purpose === "narrow the answer")

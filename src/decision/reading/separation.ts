@@ -29,7 +29,7 @@ export function separationAt(
     for (let j = 0; j < imagined; j++) {
       const truth = Math.floor(stream.uniform() * own.centres.length);
       const scaled = own.centres[truth]![rows[r]!]! + own.scatter[rows[r]!]! * stream.normal();
-      const value = own.logarithm ? Math.exp(scaled) : scaled;
+      const value = own.scale.from(scaled);
       if (!Number.isFinite(value)) continue;
       const densities = rivals.map((rival, i) => logDensity(rival, rows[i]!, value));
       const best = Math.max(...densities.filter((_, i) => i !== r));
@@ -46,12 +46,12 @@ export function separationAt(
 }
 
 /** Log density of a value on the record's scale. */
-function logDensity({ centres, scatter, logarithm }: ImaginedReadings, row: number, value: number): number {
-  if (logarithm && value <= 0) return Number.NEGATIVE_INFINITY;
-  const scaled = logarithm ? Math.log(value) : value;
+function logDensity({ centres, scatter, scale }: ImaginedReadings, row: number, value: number): number {
+  if (scale.log && value <= 0) return Number.NEGATIVE_INFINITY;
+  const scaled = scale.to(value);
   const sd = scatter[row]!;
   const squares = centres.map((centre) => ((scaled - centre[row]!) / sd) ** 2).filter(Number.isFinite);
   const least = Math.min(...squares);
   const sum = squares.reduce((total, square) => total + Math.exp(-0.5 * (square - least)), 0);
-  return Math.log(sum / centres.length) - 0.5 * least - Math.log(sd) - (logarithm ? scaled : 0);
+  return Math.log(sum / centres.length) - 0.5 * least - Math.log(sd) - (scale.log ? scaled : 0);
 }

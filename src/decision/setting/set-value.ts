@@ -1,4 +1,6 @@
-import type { Ground, InputPlan } from "../../projection/index.js";
+import type { InputPlan } from "../../dynamics/index.js";
+import { problemOf } from "../../estimate/index.js";
+import type { Ground } from "../../projection/index.js";
 import { type Standing, stateOf } from "./standing.js";
 
 /** Something that can be set: a parameter, a first value "N[0]", or the usual level of an input. */
@@ -20,7 +22,7 @@ const open: readonly [number, number] = [Number.NEGATIVE_INFINITY, Number.POSITI
 export function settingOf(standing: Standing, name: string): Setting {
   const { rule, ground } = standing;
   const parameter = rule.parameters.indexOf(name);
-  const bounds = standing.fit?.options.bounds?.[name] ?? rule.bounds[name] ?? open;
+  const bounds = standing.fit ? problemOf(standing.fit).bounds(name) : (rule.bounds[name] ?? open);
   if (parameter >= 0)
     return {
       name,

@@ -50,7 +50,7 @@ export function percent(share: number, error: number): string {
   return `${(100 * share).toFixed(Math.min(decimals, 6))}%`;
 }
 
-/** Words as a sentence begins with them: "the risk" with a capital, a name in small letters as "The value of owed". */
+/** Words as a sentence begins with them: "the chance" with a capital, a name in small letters as "The value of owed". */
 export function opened(words: string): string {
   if (words.startsWith("the ")) return `The ${words.slice(4)}`;
   return /^[a-z]/.test(words) ? `The value of ${words}` : words;

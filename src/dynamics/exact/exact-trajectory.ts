@@ -51,13 +51,13 @@ function startOf(rule: Rule, { initial }: ExactTrajectoryOptions): Rational[] {
   const past = (state: string, lag: number): Rational => {
     const given = initial[state];
     const values: readonly (ExactValue | undefined)[] = Array.isArray(given) ? given : [given];
-    const lags = rule.memory.filter((kept) => kept.state === state).length;
+    const lags = rule.lags.filter((kept) => kept.state === state).length;
     if (values.length !== lags + 1) throw wrongHistory(state, lags + 1, values.length);
     return exactValue("first value of", state, values.at(-1 - lag), Object.keys(initial));
   };
   return [
     ...rule.states.map((state) => past(state, 0)),
-    ...rule.memory.map(({ state, lag }) => past(state, lag)),
+    ...rule.lags.map(({ state, lag }) => past(state, lag)),
   ];
 }
 
@@ -100,12 +100,12 @@ export function exactTrajectory(rule: Rule, options: ExactTrajectoryOptions): Ex
   }
   const column = <T>(of: (value: Rational) => T, slot: number): T[] => rows.map((row) => of(row[slot]!));
   const byState = <T>(of: (slot: number) => T): Readonly<Record<string, T>> =>
-    Object.freeze(Object.fromEntries(rule.states.map((name, slot) => [name, of(slot)])));
-  return Object.freeze({
+    Object.fromEntries(rule.states.map((name, slot) => [name, of(slot)]));
+  return {
     kind: "exact-trajectory",
     rule,
     periods,
-    values: byState((slot) => Object.freeze(column(rationalText, slot))),
+    values: byState((slot) => column(rationalText, slot)),
     numbers: byState((slot) => Float64Array.from(column(toNumber, slot))),
-  });
+  };
 }

@@ -1,4 +1,4 @@
-import { compileRule, type Rule, readsPeriod } from "../../rule/index.js";
+import { compileRule, dependsOnPeriod, type Rule } from "../../rule/index.js";
 import { changesWithTime, strangeName, unreadableOption } from "../refusals.js";
 import { type HeldSetting, holdStep } from "../setting/held-step.js";
 import { initialVector } from "../setting/setting.js";
@@ -63,7 +63,7 @@ export function attractor(rule: Rule, options: AttractorOptions): Attractor {
   const discard = options.discard ?? 500;
   const slot = rule.parameters.indexOf(vary);
   if (slot < 0) throw strangeName("parameter", vary, rule.parameters);
-  if (readsPeriod(rule)) throw changesWithTime("attractor");
+  if (dependsOnPeriod(rule)) throw changesWithTime("attractor");
   const { parameters, width } = holdStep(
     rule,
     { parameters: { ...options.parameters, [vary]: at[0]! } },
@@ -86,12 +86,12 @@ export function attractor(rule: Rule, options: AttractorOptions): Attractor {
       }
     });
   }
-  return Object.freeze({ kind: "attractor", rule, vary, state: state!, at, values, perColumn, estimate });
+  return { kind: "attractor", rule, vary, state: state!, at, values, perColumn, estimate };
 }
 
 /** The same first value for every state and every past value that the rule reads. */
 function everywhere(rule: Rule, start: number): Record<string, readonly number[]> {
-  const lags = (state: string): number => rule.memory.filter((kept) => kept.state === state).length;
+  const lags = (state: string): number => rule.lags.filter((kept) => kept.state === state).length;
   return Object.fromEntries(
     rule.states.map((state) => [state, new Array<number>(lags(state) + 1).fill(start)]),
   );

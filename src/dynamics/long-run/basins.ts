@@ -87,7 +87,7 @@ function probabilityOf(
  */
 export function basins(rule: Rule, options: BasinsOptions): Basins {
   const { range: within, count: starts = 400, periods = 3_000 } = options;
-  if (rule.states.length !== 1 || rule.memory.length > 0) throw oneStateOnly("A basin", rule.states);
+  if (rule.states.length !== 1 || rule.lags.length > 0) throw oneStateOnly("A basin", rule.states);
   if (!(within[0] < within[1]))
     throw unreadableOption("within", "two numbers, lowest first", JSON.stringify(within));
   const held = holdStep(rule, options, "basin");
@@ -117,12 +117,12 @@ export function basins(rule: Rule, options: BasinsOptions): Basins {
   });
   const list = found
     .filter(({ from }) => from.length > 0)
-    .map((basin) => Object.freeze({ ...basin, probability: probabilityOf(basin.from, within, options) }));
-  return Object.freeze({
+    .map((basin) => ({ ...basin, probability: probabilityOf(basin.from, within, options) }));
+  return {
     kind: "basins",
     rule,
     range: within,
-    basins: Object.freeze(list),
-    borders: Object.freeze(borders),
-  });
+    basins: list,
+    borders,
+  };
 }

@@ -45,7 +45,7 @@ function corners(values: Float64Array): Cobweb["web"] {
  */
 export function cobweb(rule: Rule, options: CobwebOptions): Cobweb {
   const { periods = 30 } = options;
-  if (rule.states.length !== 1 || rule.memory.length > 0) throw oneStateOnly("A cobweb", rule.states);
+  if (rule.states.length !== 1 || rule.lags.length > 0) throw oneStateOnly("A cobweb", rule.states);
   const held = holdStep(rule, options, "cobweb");
   const [state] = rule.states;
   const run = trajectory(rule, { ...options, periods });
@@ -66,7 +66,7 @@ export function cobweb(rule: Rule, options: CobwebOptions): Cobweb {
       return at[0]!;
     });
   const next = stepped(present);
-  return Object.freeze({
+  return {
     kind: "cobweb",
     rule,
     state: state!,
@@ -75,5 +75,5 @@ export function cobweb(rule: Rule, options: CobwebOptions): Cobweb {
     secondNext: stepped(next),
     web: corners(values),
     equilibria: equilibria(rule, { ...options, range: within }).points,
-  });
+  };
 }

@@ -61,7 +61,7 @@ function polished(matrix: Matrix, right: readonly number[], left: readonly numbe
 export function matrixGrowth(rule: Rule, setting: HeldSetting = {}): MatrixGrowth {
   const held = holdStep(rule, setting, "long run");
   const { next, matrix: flat } = held.slopes(new Float64Array(held.width));
-  if (!isLinearInStates(rule) || rule.memory.length > 0 || next.some((value) => value !== 0))
+  if (!isLinearInStates(rule) || rule.lags.length > 0 || next.some((value) => value !== 0))
     throw notAMatrixRule();
   const size = held.width;
   const rows = Array.from({ length: size }, (_, i) => [...flat.subarray(i * size, (i + 1) * size)]);
@@ -76,13 +76,13 @@ export function matrixGrowth(rule: Rule, setting: HeldSetting = {}): MatrixGrowt
   const sensitivities = rows.map((row, i) => row.map((_, j) => (left[i]! * right[j]!) / product));
   const second = multipliers.find((one) => one !== first);
   const sums = rows.map((_, j) => rows.reduce((sum, row) => sum + row[j]!, 0));
-  return Object.freeze({
+  return {
     kind: "matrix-growth",
     rule,
     states: rule.states,
     matrix: rows,
     dominant,
-    multipliers: Object.freeze(multipliers),
+    multipliers,
     structure: right,
     reproductiveValues: left.map((value) => value / left[0]!),
     sensitivities,
@@ -90,5 +90,5 @@ export function matrixGrowth(rule: Rule, setting: HeldSetting = {}): MatrixGrowt
     dampingRatio:
       second === undefined || second.modulus === 0 ? Number.POSITIVE_INFINITY : dominant / second.modulus,
     firstPeriod: { most: Math.max(...sums), least: Math.min(...sums) },
-  });
+  };
 }

@@ -57,13 +57,13 @@ function described(held: HeldStep, present: ArrayLike<number>): Equilibrium {
     const unit = rule.units[name] ?? "";
     return `${name} = ${shown(state[i]!)}${unit === "" ? "" : ` ${unit}`}`;
   });
-  return Object.freeze({
-    at: Object.freeze(Object.fromEntries(rule.states.map((name, i) => [name, state[i]!]))),
+  return {
+    at: Object.fromEntries(rule.states.map((name, i) => [name, state[i]!])),
     residual,
-    multipliers: Object.freeze(multipliers),
+    multipliers,
     ...stability,
     sentence: `The equilibrium ${names.join(", ")} ${stability.words}.`,
-  });
+  };
 }
 
 type Found = { readonly points: readonly Float64Array[]; readonly search: Equilibria["search"] };
@@ -126,15 +126,13 @@ export function equilibria(rule: Rule, options: EquilibriaOptions = {}): Equilib
   const single = rule.states.length === 1;
   const starts = single ? 0 : (options.searches ?? 400);
   const found = single ? ofOneState(held, ranges[0]!) : ofSystem(held, ranges, starts);
-  return Object.freeze({
+  return {
     kind: "equilibria",
     rule,
-    parameters: Object.freeze(
-      Object.fromEntries(rule.parameters.map((name, i) => [name, held.parameters[i]!])),
-    ),
-    range: Object.freeze(Object.fromEntries(rule.states.map((name, i) => [name, ranges[i]!]))),
-    points: Object.freeze(found.points.map((point) => described(held, point))),
+    parameters: Object.fromEntries(rule.parameters.map((name, i) => [name, held.parameters[i]!])),
+    range: Object.fromEntries(rule.states.map((name, i) => [name, ranges[i]!])),
+    points: found.points.map((point) => described(held, point)),
     search: found.search,
     searches: starts,
-  });
+  };
 }

@@ -2,14 +2,14 @@ import { Matrix, solve } from "ml-matrix";
 import { type HeldStep, settled } from "../setting/held-step.js";
 
 /** Slopes of the next present values by settled present values [states, states], and the gap to rest. */
-function linearisedGap(held: HeldStep, present: Float64Array): { gap: Float64Array; slopes: Matrix } {
+export function linearisedGap(held: HeldStep, present: Float64Array): { gap: Float64Array; slopes: Matrix } {
   const { rule, width } = held;
   const states = rule.states.length;
   const { next, matrix } = held.slopes(settled(rule, present));
   const slopes = Matrix.zeros(states, states);
   for (let i = 0; i < states; i++) {
     for (let slot = 0; slot < width; slot++) {
-      const column = slot < states ? slot : rule.states.indexOf(rule.memory[slot - states]!.state);
+      const column = slot < states ? slot : rule.states.indexOf(rule.lags[slot - states]!.state);
       slopes.set(i, column, slopes.get(i, column) + matrix[i * width + slot]!);
     }
     slopes.set(i, i, slopes.get(i, i) - 1);

@@ -1,4 +1,4 @@
-import { compileRule, inputReach, type Rule, readsPeriod } from "../../rule/index.js";
+import { compileRule, dependsOnPeriod, inputOffsets, type Rule } from "../../rule/index.js";
 import { changesWithTime } from "../refusals.js";
 import { heldInputs, parametersBySlot } from "./setting.js";
 
@@ -31,13 +31,13 @@ const longestLeap = 64;
 
 /** Holds a rule's parameters and inputs, or says why it cannot be held. */
 export function holdStep(rule: Rule, setting: HeldSetting, what: string): HeldStep {
-  if (readsPeriod(rule)) throw changesWithTime(what);
+  if (dependsOnPeriod(rule)) throw changesWithTime(what);
   const parameters = parametersBySlot(rule, setting.parameters);
   const inputs = heldInputs(rule, setting.inputs);
   const compiled = compileRule(rule);
-  const width = rule.states.length + rule.memory.length;
+  const width = rule.states.length + rule.lags.length;
   // Columns long enough for every period that a leap reads, with its first step in their middle.
-  const reach = Math.max(0, ...inputReach(rule).flatMap(([earliest, latest]) => [-earliest, latest]));
+  const reach = Math.max(0, ...inputOffsets(rule).flatMap(([earliest, latest]) => [-earliest, latest]));
   const columns = Array.from(inputs, (value) => new Float64Array(2 * reach + longestLeap).fill(value));
   const unknowns = parameters.length + width;
   const values = new Float64Array(2 * width);
@@ -80,6 +80,6 @@ export function holdStep(rule: Rule, setting: HeldSetting, what: string): HeldSt
 export function settled(rule: Rule, present: ArrayLike<number>): Float64Array {
   return Float64Array.from([
     ...rule.states.map((_, slot) => present[slot]!),
-    ...rule.memory.map(({ state }) => present[rule.states.indexOf(state)]!),
+    ...rule.lags.map(({ state }) => present[rule.states.indexOf(state)]!),
   ]);
 }

@@ -30,7 +30,7 @@ export const heldInputs = (rule: Rule, given: Readonly<Record<string, number>> =
   bySlot("input", rule.inputs, given);
 
 function firstValues(rule: Rule, state: string, given: InitialValues): readonly number[] {
-  const lags = rule.memory.filter((kept) => kept.state === state).length;
+  const lags = rule.lags.filter((kept) => kept.state === state).length;
   const value = given[state]!;
   const values = typeof value === "number" ? [value] : value;
   if (values.length !== lags + 1) throw wrongHistory(state, lags + 1, values.length);
@@ -51,6 +51,6 @@ export function initialVector(rule: Rule, given: InitialValues = {}): Float64Arr
   const past = (state: string, lag: number): number => firstValues(rule, state, all).at(-1 - lag)!;
   return Float64Array.from([
     ...rule.states.map((state) => past(state, 0)),
-    ...rule.memory.map(({ state, lag }) => past(state, lag)),
+    ...rule.lags.map(({ state, lag }) => past(state, lag)),
   ]);
 }

@@ -14,7 +14,7 @@ export function namedValues(
 
 /** Refuses values outside the range in which a rule of the catalogue means what it says. */
 export function refuseOutsideRange(rule: Rule, values: Readonly<Record<string, number>>): void {
-  for (const text of rule.named?.holds ?? []) {
+  for (const text of rule.named?.validWhen ?? []) {
     const condition = formula(text, "condition");
     // A condition on an input, or on a first value that is not given, is not judged here.
     if (!condition.names.every((name) => Object.hasOwn(values, name))) continue;

@@ -1,4 +1,10 @@
-import { type Interval, intervalAlgebra, type PlaceOver, type Rule, stepOver } from "../../rule/index.js";
+import {
+  type Interval,
+  intervalAlgebra,
+  type Rule,
+  type StepArgumentsOver,
+  stepOver,
+} from "../../rule/index.js";
 import { type HeldSetting, holdStep } from "../setting/held-step.js";
 import { type InitialValues, initialVector } from "../setting/setting.js";
 
@@ -34,7 +40,7 @@ interface Known {
 function advance(
   rule: Rule,
   known: Known,
-  place: (state: readonly Interval[]) => PlaceOver<Interval>,
+  place: (state: readonly Interval[]) => StepArgumentsOver<Interval>,
 ): Known {
   const step = stepOver(rule, intervalAlgebra);
   const rounded = step.next(place(known.center.map(exactly)));
@@ -63,7 +69,7 @@ export function guaranteedDigits(rule: Rule, options: GuaranteedOptions = {}): G
   const held = holdStep(rule, options, "number of steps to which digits are kept");
   const parameters = Array.from(held.parameters, exactly);
   const inputs = Array.from(held.inputs, exactly);
-  const place = (state: readonly Interval[]): PlaceOver<Interval> => ({
+  const place = (state: readonly Interval[]): StepArgumentsOver<Interval> => ({
     state,
     parameters,
     input: (slot) => inputs[slot]!,
@@ -76,7 +82,7 @@ export function guaranteedDigits(rule: Rule, options: GuaranteedOptions = {}): G
     const kept = known.center.every(
       (value, i) => known.radius[i]! <= 0.5 * 10 ** -digits * Math.abs(value) || known.radius[i] === 0,
     );
-    if (!kept) return Object.freeze({ digits, periods: t - 1, throughout: false });
+    if (!kept) return { digits, periods: t - 1, throughout: false };
   }
-  return Object.freeze({ digits, periods, throughout: true });
+  return { digits, periods, throughout: true };
 }

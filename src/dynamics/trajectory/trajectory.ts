@@ -1,19 +1,25 @@
-import { compileRule, explainFailure, quantitiesAt, type Rule, type StepPlace } from "../../rule/index.js";
+import { type PeriodAxis, periodWords } from "../../record/index.js";
+import {
+  compileRule,
+  explainFailure,
+  quantitiesAt,
+  type Rule,
+  type StepArguments,
+} from "../../rule/index.js";
+import type { InputPlans } from "../inputs/input-plan.js";
+import { initialFrom, inputsFrom, runStart, type StartOptions } from "../inputs/run-start.js";
 import { unreadableOption } from "../refusals.js";
-import { type InputValues, inputColumns } from "../setting/input-columns.js";
 import { type InitialValues, initialVector, parametersBySlot } from "../setting/setting.js";
 import { namedValues, refuseOutsideRange } from "../setting/valid-range.js";
 
-export interface TrajectoryOptions {
+export interface TrajectoryOptions extends StartOptions {
   /** By parameter; those the rule holds fixed may be left out. */
   readonly parameters?: Readonly<Record<string, number>>;
   /** By state; those the rule states may be left out. */
   readonly initial?: InitialValues;
   readonly periods: number;
-  /** By input: values by absolute period. */
-  readonly inputs?: InputValues;
-  /** Absolute period of the first value; default 0. */
-  readonly startsAt?: number;
+  /** By input: what it will be, from the first period on. */
+  readonly inputs?: InputPlans;
 }
 
 /** Why a path ends where it does. */
@@ -29,7 +35,10 @@ export interface Trajectory {
   readonly kind: "trajectory";
   readonly rule: Rule;
   readonly parameters: Readonly<Record<string, number>>;
+  /** The index of the first period, `t` in the rule. */
   readonly startsAt: number;
+  /** The axis that names the periods: `startsAt` and those after it. */
+  readonly axis: PeriodAxis;
   /** Periods that have a value, not counting the first. */
   readonly periods: number;
   /** By state: [periods + 1]. */
@@ -45,12 +54,13 @@ interface Run {
   readonly parameters: Float64Array;
   readonly inputs: readonly Float64Array[];
   readonly from: number;
+  readonly axis: PeriodAxis;
   readonly width: number;
   /** [periods + 1, width] */
   readonly table: Float64Array;
 }
 
-function placeAt(run: Run, row: number): StepPlace {
+function placeAt(run: Run, row: number): StepArguments {
   const state = run.table.subarray(row * run.width, (row + 1) * run.width);
   return { state, parameters: run.parameters, inputs: run.inputs, t: run.from + row };
 }
@@ -68,7 +78,7 @@ function leavesFinite(run: Run): End | undefined {
   const period = run.from + rows;
   const failure = explainFailure(run.rule, placeAt(run, rows - 1));
   const cause = failure === undefined ? "" : `: ${failure.reason}`;
-  const reason = `The rule leaves the finite range at period ${period}${cause}.`;
+  const reason = `The rule leaves the finite range at ${periodWords(run.axis, period)}${cause}.`;
   return { rows, stop: { kind: "left-finite-range", period, reason } };
 }
 
@@ -83,7 +93,7 @@ function leavesBounds(run: Run, rows: number): End | undefined {
       const value = run.table[row * run.width + slot]!;
       if (value >= range[0] && value <= range[1]) continue;
       const period = run.from + row;
-      const reason = `${name} leaves its bounds ${range[0]} to ${range[1]} at period ${period}, with ${value}; further values would mean nothing.`;
+      const reason = `${name} leaves its bounds ${range[0]} to ${range[1]} at ${periodWords(run.axis, period)}, with ${value}; further values would mean nothing.`;
       return { rows: row + 1, stop: { kind: "left-bounds", period, reason } };
     }
   }
@@ -104,7 +114,7 @@ function quantityColumns(run: Run, rows: number): Readonly<Record<string, Float6
       columns[k]![row] = value;
     });
   }
-  return Object.freeze(Object.fromEntries(quantities.map((name, k) => [name, columns[k]!])));
+  return Object.fromEntries(quantities.map((name, k) => [name, columns[k]!]));
 }
 
 /**
@@ -113,34 +123,37 @@ function quantityColumns(run: Run, rows: number): Readonly<Record<string, Float6
  * @param rule - any rule; one with lags needs as many first values as it reads, oldest first.
  * @param options.periods - steps to take, a whole number from 0.
  * @returns the values by state [periods + 1], and why the path ends; it stops before a value that is not finite.
- * @throws {ModelError} `missing-value` | `unknown-name` | `wrong-history` | `missing-input` | `unreadable-option`.
+ * @throws {ModelError} `missing-value` | `unknown-name` | `wrong-history` | `missing-input` | `future-input-missing` |
+ *   `plan-not-readable` | `start-not-readable` | `unreadable-option`.
  * @example trajectory(recurrence("N[t+1] = R*N"), { parameters: { R: 2 }, initial: { N: 3 }, periods: 2 }).values.N; // 3, 6, 12
  */
 export function trajectory(rule: Rule, options: TrajectoryOptions): Trajectory {
-  const { periods, startsAt: from = 0 } = options;
+  const { periods } = options;
   if (!Number.isSafeInteger(periods) || periods < 0) {
     throw unreadableOption("periods", "a whole number from 0 on", periods);
   }
-  if (!Number.isSafeInteger(from)) throw unreadableOption("startsAt", "a whole number", from);
+  const start = runStart(options);
+  const { from, axis } = start;
   const parameters = parametersBySlot(rule, options.parameters);
-  const initial = initialVector(rule, options.initial);
+  const initial = initialVector(rule, initialFrom(rule, start, options.initial));
   refuseOutsideRange(rule, namedValues(rule, parameters, initial));
-  const inputs = inputColumns(rule, options.inputs, from, periods);
+  const inputs = inputsFrom(rule, start, periods, options.inputs ?? {});
   const width = initial.length;
   const table = new Float64Array((periods + 1) * width);
   compileRule(rule).path(initial, parameters, inputs, from, periods, table);
-  const run: Run = { rule, parameters, inputs, from, width, table };
+  const run: Run = { rule, parameters, inputs, from, axis, width, table };
   const { rows, stop } = stopOf(run, periods);
   const column = (slot: number): Float64Array =>
     Float64Array.from({ length: rows }, (_, row) => table[row * width + slot]!);
-  return Object.freeze({
+  return {
     kind: "trajectory",
     rule,
-    parameters: Object.freeze(Object.fromEntries(rule.parameters.map((name, i) => [name, parameters[i]!]))),
+    parameters: Object.fromEntries(rule.parameters.map((name, i) => [name, parameters[i]!])),
     startsAt: from,
+    axis,
     periods: rows - 1,
-    values: Object.freeze(Object.fromEntries(rule.states.map((name, slot) => [name, column(slot)]))),
+    values: Object.fromEntries(rule.states.map((name, slot) => [name, column(slot)])),
     quantities: quantityColumns(run, rows),
-    stop: Object.freeze(stop),
-  });
+    stop,
+  };
 }

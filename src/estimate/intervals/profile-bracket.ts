@@ -57,9 +57,7 @@ export function outward(walk: ProfileWalk, way: Way): Reached | undefined {
     met.push(here);
     if (here.excess >= way.firm || (level >= levelDoublings && made >= leastDoublings)) break;
   }
-  const last = met.map(({ excess }) => excess < 0).lastIndexOf(true);
-  const outside = met[last + 1];
-  return outside && { inside: met[last]!, outside, highest: Math.max(...met.map(({ excess }) => excess)) };
+  return reachedBy(met);
 }
 
 /**
@@ -67,25 +65,33 @@ export function outward(walk: ProfileWalk, way: Way): Reached | undefined {
  * it cannot: along a narrow curved valley a doubled distance leads out of it. Undefined where the cut is not passed.
  */
 export function carefully(walk: ProfileWalk, way: Way, from: ProfilePoint): Reached | undefined {
-  const { estimate, bound, firm, root } = way;
+  const { estimate, bound, root } = way;
   const direction = Math.sign(way.spacing);
   const first = Math.abs(from.value - estimate);
-  let here = from;
-  let inside = from;
-  let outside: ProfilePoint | undefined;
+  const met = [from];
   let step = firstStep * first;
-  for (let k = 0; k < steps && Math.abs(here.value - estimate) < farEnough * first; k++) {
+  for (let k = 0; k < steps && !isOver(met, way, first); k++) {
+    const here = met[met.length - 1]!;
     const free = here.value + direction * step;
     const next = walk.at(direction > 0 ? Math.min(free, bound) : Math.max(free, bound));
     const isFollowed = next.excess - here.excess < root || step < leastStep * first;
     step *= isFollowed ? 2 : 0.25;
-    if (!isFollowed) continue;
-    if (next.excess < 0) inside = next;
-    outside = next.excess < 0 ? undefined : (outside ?? next);
-    here = next;
-    if (next.excess >= firm || next.value === bound) break;
+    if (isFollowed) met.push(next);
   }
-  return outside && { inside, outside, highest: here.excess };
+  return reachedBy(met);
+}
+
+/** Whether careful steps have left the cut for good, met the bound, or gone far enough. */
+function isOver(met: readonly ProfilePoint[], { estimate, bound, firm }: Way, first: number): boolean {
+  const { value, excess } = met[met.length - 1]!;
+  return excess >= firm || value === bound || Math.abs(value - estimate) >= farEnough * first;
+}
+
+/** The last two neighbours on both sides of the cut; undefined where the last point lies within it. */
+function reachedBy(met: readonly ProfilePoint[]): Reached | undefined {
+  const last = met.map(({ excess }) => excess < 0).lastIndexOf(true);
+  const outside = met[last + 1];
+  return outside && { inside: met[last]!, outside, highest: Math.max(...met.map(({ excess }) => excess)) };
 }
 
 /** The point within the cut that lies farthest out. */
@@ -130,12 +136,13 @@ export function narrowed(walk: ProfileWalk, { root }: Way, bracket: Bracket): Br
   return zero.excess - here.excess < levelStep * root ? { inside: here, outside: zero } : undefined;
 }
 
+/** The value at which a profile meets its cut, or at which it jumps over it: then that of the point inside. */
+export interface Crossing extends Bracket {
+  readonly value: number;
+}
+
 /** The value inside a bracket at which the profile meets its cut, by Newton's iteration kept between its ends. */
-export function crossing(
-  walk: ProfileWalk,
-  { estimate }: Way,
-  { inside, outside }: Bracket,
-): Bracket & { readonly value: number } {
+export function crossing(walk: ProfileWalk, { estimate }: Way, { inside, outside }: Bracket): Crossing {
   const byLogarithm = Math.abs(Math.log(outside.value / inside.value)) > Math.log(farApart);
   let [low, high] = [inside, outside];
   let best = Math.abs(high.excess) < Math.abs(low.excess) ? high : low;

@@ -1,5 +1,5 @@
-import type { ObservedGroup } from "../../record/index.js";
-import { inputReach, type Rule } from "../../rule/index.js";
+import { inputByPeriod, type ObservedGroup } from "../../record/index.js";
+import { inputOffsets, type Rule } from "../../rule/index.js";
 import {
   refuseAllCensored,
   refuseInputGap,
@@ -32,15 +32,14 @@ function checkNumber(rule: Rule, group: ObservedGroup, options: FitOptions, name
 
 /** Every input must be recorded in every period that a fitted step reads. */
 function checkInputs(rule: Rule, group: ObservedGroup, options: FitOptions): void {
-  const reach = rule.inputs.length === 0 ? [] : inputReach(rule);
+  const reach = rule.inputs.length === 0 ? [] : inputOffsets(rule);
   rule.inputs.forEach((name, k) => {
-    const column = group.inputs[name];
-    if (!column) throw refuseMissingInput(name, group);
+    if (!group.inputs[name]) throw refuseMissingInput(name, group);
     const [earliest, latest] = reach[k]!;
-    const known = new Set(Array.from(group.index).filter((_, i) => Number.isFinite(column[i])));
+    const column = inputByPeriod(group, name);
     for (const period of steppedPeriods(rule, group, options))
       for (let at = period + earliest; at <= period + latest; at++)
-        if (!known.has(at)) throw refuseInputGap(name, group, at);
+        if (!Number.isFinite(column[at])) throw refuseInputGap(name, group, at);
   });
 }
 

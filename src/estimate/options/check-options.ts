@@ -1,4 +1,4 @@
-import { type Rule, roughness } from "../../rule/index.js";
+import { nonsmoothCalls, type Rule } from "../../rule/index.js";
 import {
   refuseFactor,
   refuseJumps,
@@ -19,7 +19,7 @@ export function checkOptions(rule: Rule, options: FitOptions): void {
   if (options.factor !== undefined && options.errors !== "observation") throw refuseFactor(options.errors);
   const alone = (options.groups ?? "separate") === "separate";
   if (options.robust === true && !(bySquares(options) && alone)) throw refuseRobust();
-  const [jump] = roughness(rule).jumps;
+  const [jump] = nonsmoothCalls(rule).jumps;
   if (jump !== undefined) throw refuseJumps(jump.function, rule.text);
 }
 

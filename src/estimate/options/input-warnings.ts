@@ -23,7 +23,7 @@ function takenAsParameter(rule: Rule, input: string): string {
 
 function notUsed(rule: Rule, input: string): string {
   const said = `The record holds an input "${input}", which the rule does not read, so it was not used`;
-  const symbol = rule.named?.mayBeInput?.find((name) => rule.parameters.includes(name));
+  const symbol = rule.named?.optionalInputs?.find((name) => rule.parameters.includes(name));
   if (symbol === undefined) return `${said}.`;
   return `${said}; ${symbol} of the rule was taken as a parameter. If ${input} is ${symbol}, give observations(..., { inputs: { ${symbol}: "${input}" } }) and ${readingIt(rule, symbol)}.`;
 }

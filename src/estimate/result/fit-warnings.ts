@@ -1,11 +1,12 @@
 import type { Warning } from "../../numeric/index.js";
-import { type Rule, roughness } from "../../rule/index.js";
+import { nonsmoothCalls, type Rule } from "../../rule/index.js";
 import type { FitOptions } from "../options/fit-options.js";
 import type { Optimum } from "../search/optimum.js";
 import type { Unknowns } from "../unknowns/unknowns.js";
 import { correlationWarnings } from "./correlation-warnings.js";
 import type { Estimate } from "./estimate-of.js";
 import type { GroupFit } from "./group-fit.js";
+import { overdispersionWarnings } from "./overdispersion.js";
 import { slopeWarnings } from "./slope-warnings.js";
 
 /** Usable values a parameter below which a fit carries a caution: common practice, no source. */
@@ -31,6 +32,7 @@ export function fitWarnings(fit: Omit<GroupFit, "warnings">, context: FitContext
     ...bends(fit, context.rule),
     ...slopeWarnings(fit, context),
     ...fewValues(fit),
+    ...overdispersionWarnings(fit.overdispersion),
   ];
 }
 
@@ -53,7 +55,8 @@ function undetermined(fit: Omit<GroupFit, "warnings">, { found }: FitContext): W
       ? `only a combination of ${together.map(({ name }) => name).join(" and ")} enters`
       : "no value of it changes the fit";
   const reason = (each: Estimate): string => {
-    if (hasRunOff(fit, each.value)) return "its best value lies beyond any limit";
+    const towards = found.unbounded[fit.estimates.indexOf(each)]!;
+    if (towards * each.value > 0) return "it has no finite optimum";
     return together.includes(each) ? combination : each.profile.note || "its profile has no limit";
   };
   return loose.map((each) => ({
@@ -82,18 +85,6 @@ function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">): Warning[] {
 
 const shown = (limit: number | undefined, none: string): string => limit?.toPrecision(3) ?? none;
 
-/** Parameters this many times beyond every value of the record, and beyond 1, have run off. */
-const runaway = 1e6;
-
-function hasRunOff(fit: Omit<GroupFit, "warnings">, value: number): boolean {
-  const most = fit.points.reduce((high, { observed }) => Math.max(high, Math.abs(observed)), 1);
-  return Math.abs(value) > runaway * most;
-}
-
-function valueShown(fit: Omit<GroupFit, "warnings">, value: number): string {
-  return hasRunOff(fit, value) ? "beyond any limit" : value.toPrecision(4);
-}
-
 function atBounds(fit: Omit<GroupFit, "warnings">, unknowns: Unknowns): Warning[] {
   return fit.estimates
     .filter((estimate, i) => estimate.value === unknowns.lower[i] || estimate.value === unknowns.upper[i])
@@ -106,7 +97,7 @@ function atBounds(fit: Omit<GroupFit, "warnings">, unknowns: Unknowns): Warning[
 function rivals(fit: Omit<GroupFit, "warnings">): Warning[] {
   if (fit.rivals.length === 0) return [];
   const told = fit.rivals.map(({ estimates, behind }) => {
-    const values = estimates.map((value, i) => `${fit.estimates[i]!.name} ${valueShown(fit, value)}`);
+    const values = estimates.map((value, i) => `${fit.estimates[i]!.name} ${value.toPrecision(4)}`);
     return `${values.join(", ")} (${behind.toFixed(2)} log-likelihood units behind)`;
   });
   return [
@@ -119,7 +110,7 @@ function rivals(fit: Omit<GroupFit, "warnings">): Warning[] {
 
 /** At a smooth optimum the search ends on its gradient; on a bend of the rule it cannot. */
 function bends(fit: Omit<GroupFit, "warnings">, rule: Rule): Warning[] {
-  const [bend] = roughness(rule).kinks;
+  const [bend] = nonsmoothCalls(rule).kinks;
   const smooth = fit.stop.kind === "converged" && fit.stop.test === "gradient";
   if (bend === undefined || smooth) return [];
   return [

@@ -38,7 +38,7 @@ function slopeAt(
   fit: Omit<GroupFit, "warnings">,
   { rule, options, unknowns, found }: FitContext,
 ): number | undefined {
-  if (rule.states.length !== 1 || rule.memory.length > 0 || rule.inputs.length > 0) return undefined;
+  if (rule.states.length !== 1 || rule.lags.length > 0 || rule.inputs.length > 0) return undefined;
   place(unknowns, found.at);
   const ordered = fit.points.map(({ observed }) => observed).sort((a, b) => a - b);
   const middle = ordered[ordered.length >> 1]!;

@@ -10,12 +10,12 @@ export interface Slot {
 
 /** The longest lag that the rule reads; a trajectory starts at that period, its past values being the first ones. */
 export function longestLag(rule: Rule): number {
-  return Math.max(0, ...rule.memory.map(({ lag }) => lag));
+  return Math.max(0, ...rule.lags.map(({ lag }) => lag));
 }
 
 /** The rule's state vector: states in order, then the past values kept. */
 export function slotsOf(rule: Rule): readonly Slot[] {
   const first = longestLag(rule);
-  const all = [...rule.states.map((state) => ({ state, lag: 0 })), ...rule.memory];
+  const all = [...rule.states.map((state) => ({ state, lag: 0 })), ...rule.lags];
   return all.map(({ state, lag }) => ({ state, lag, name: `${state}[${first - lag}]` }));
 }

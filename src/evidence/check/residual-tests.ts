@@ -1,4 +1,4 @@
-import type { Fit, GroupFit } from "../../estimate/index.js";
+import { type Fit, type GroupFit, problemOf } from "../../estimate/index.js";
 import { autocorrelations } from "../statistics/autocorrelation.js";
 import { durbinWatson } from "../statistics/durbin-watson.js";
 import { boxPierce, ljungBox } from "../statistics/portmanteau.js";
@@ -40,9 +40,9 @@ function testsOfState(fit: Fit, group: GroupFit, state: string): ResidualTest[] 
   const residuals = points.map((point) => point.residual);
   const series = residualSeries(group, state);
   const lags = Math.max(1, Math.min(10, Math.floor(residuals.length / 5)));
-  const fitted = fit.options.errors === "process" ? 1 + fit.rule.memory.length : 0;
-  const log = fit.options.distribution === "lognormal";
-  const levels = points.map((point) => (log ? Math.log(point.fitted) : point.fitted));
+  const { errors, scale } = problemOf(fit);
+  const fitted = errors === "process" ? 1 + fit.rule.lags.length : 0;
+  const levels = points.map((point) => scale.to(point.fitted));
   const improved = ljungBox(series, lags, fitted);
   const plain = boxPierce(series, lags, fitted);
   const runs = runsTest(residuals);

@@ -1,4 +1,4 @@
-import type { Fit, GroupFit } from "../../estimate/index.js";
+import { type Fit, type GroupFit, problemOf } from "../../estimate/index.js";
 import type { GroupCheck } from "./check.js";
 import type { RecoveredUnknown } from "./recovery.js";
 import { probabilityText } from "./residual-tests.js";
@@ -112,7 +112,7 @@ const isBiased = (unknown: RecoveredUnknown): boolean =>
   Math.abs(unknown.medianBias) > biased * unknown.deviation;
 
 function errorConcerns(fit: Fit, { errors }: Found): string[] {
-  const given = fit.options.errors;
+  const given = problemOf(fit).errors;
   const agrees = errors === undefined || errors.kind === "undecided" || errors.kind === given;
   return agrees || given === "both" ? [] : [errors.sentence];
 }

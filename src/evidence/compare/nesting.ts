@@ -46,8 +46,7 @@ function combinations(names: readonly string[]): Record<string, number>[] {
 function stepAlike(smaller: Fit, larger: Fit, extra: Readonly<Record<string, number>>): boolean {
   if (smaller.rule.states.join() !== larger.rule.states.join()) return false;
   if (smaller.rule.inputs.join() !== larger.rule.inputs.join()) return false;
-  if (smaller.rule.memory.length + larger.rule.memory.length > 0)
-    return smaller.rule.text === larger.rule.text;
+  if (smaller.rule.lags.length + larger.rule.lags.length > 0) return smaller.rule.text === larger.rule.text;
   const stream = randomStream(1);
   const base = { ...larger.groups[0]!.parameters, ...smaller.groups[0]!.parameters, ...extra };
   const group = smaller.observations.groups[0]!;

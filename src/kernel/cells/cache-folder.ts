@@ -2,8 +2,8 @@ import { homedir } from "node:os";
 import { join } from "node:path";
 
 /**
- * Where this user's programs keep what they can make again.
- * @see XDG Base Directory Specification; on macOS and Windows the places that those systems name.
+ * The cache folder of this user.
+ * @see XDG Base Directory Specification; the usual folders on macOS and Windows.
  */
 export function cacheFolder(): string {
   const { XDG_CACHE_HOME, LOCALAPPDATA } = process.env;

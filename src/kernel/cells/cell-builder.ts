@@ -1,19 +1,19 @@
 import type ts from "typescript-cell";
 
 /**
- * What the converter asks of a builder, over a plain program. The compiler's own builder works out who is
- * affected by a change, which a single cell does not need.
+ * The builder interface that the converter uses, over a plain program. The compiler's own builder tracks which files a
+ * change affects, which a single cell does not need.
  */
 export function cellBuilder(library: typeof ts): ts.CreateProgram<ts.BuilderProgram> {
   return (...given) => {
     const builder = Reflect.apply(library.createAbstractBuilder, undefined, given) as ts.BuilderProgram;
-    // The converter looks at scopes and parents, which are there once the checker has bound the files.
+    // The converter reads scopes and parents, which exist once the checker has bound the files.
     builder.getProgram().getTypeChecker();
     return { ...builder, getAllDependencies: (file) => sourcesReachedFrom(builder.getProgram(), file) };
   };
 }
 
-/** A file and the sources it imports, directly or not. Declarations are not followed: nothing is run of them. */
+/** A file and the sources it imports, directly or not. Declarations are skipped: they are not run. */
 function sourcesReachedFrom(program: ts.Program, from: ts.SourceFile): string[] {
   const reached = new Set<ts.SourceFile>([from]);
   for (const file of reached) {
@@ -29,7 +29,7 @@ interface ResolvedModules {
   forEach(visit: (resolved: { readonly resolvedModule?: ts.ResolvedModuleFull } | undefined) => void): void;
 }
 
-/** The compiler keeps on each file what its imports mean; its declarations leave that out. */
+/** The compiler stores the resolved imports on each file, in a field that its declarations omit. */
 function importedPaths(file: ts.SourceFile): readonly string[] {
   const paths: string[] = [];
   const modules = Reflect.get(file, "resolvedModules") as ResolvedModules | undefined;

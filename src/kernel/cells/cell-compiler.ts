@@ -1,62 +1,64 @@
 import { createRequire } from "node:module";
 import type { Converter, Diagnostic } from "tslab/dist/converter";
 import type ts from "typescript-cell";
-import { CellError, type Complaint } from "./cell-error.js";
+import { type CellDiagnostic, CellError } from "./cell-error.js";
 import { type CellTypescript, cellTypescript } from "./cell-typescript.js";
-import type { OwnPackage } from "./installation.js";
+import type { BundledPackage } from "./installation.js";
 import { needsNodeTypes } from "./node-types.js";
-import type { PlaceFinder } from "./source-places.js";
+import type { PositionMapper } from "./source-positions.js";
 import { hasTopLevelForAwait } from "./top-level-for-await.js";
 
 const load = createRequire(__filename);
 
-/** A cell made ready to run. */
+/** A compiled cell. */
 export interface CompiledCell {
   readonly code: string;
-  /** What later cells may name, as declarations. */
+  /** Declarations of the names that later cells can use. */
   readonly declarations: string;
   readonly usesAwait: boolean;
-  /** Whether its waits were turned into yields. */
+  /** Whether its awaits were turned into yields. */
   readonly yields: boolean;
   /** The export that holds the value of the cell's last expression. */
   readonly lastValue: string | undefined;
-  readonly findPlace: PlaceFinder | undefined;
-  /** Files beside the notebook, compiled anew. */
+  readonly mapPosition: PositionMapper | undefined;
+  /** Files beside the notebook that were compiled again. */
   readonly modules: readonly CompiledModule[];
 }
 
 export interface CompiledModule {
   readonly path: string;
   readonly code: string;
-  readonly findPlace: PlaceFinder | undefined;
+  readonly mapPosition: PositionMapper | undefined;
 }
 
 export interface CellCompiler {
   readonly library: typeof ts;
-  /** @throws {CellError} when the text does not pass. */
+  /** @throws {CellError} when the text does not compile. */
   readonly compile: (declarations: string, text: string) => CompiledCell;
   readonly complete: Converter["complete"];
   readonly inspect: Converter["inspect"];
-  /** Keeps for the next start what makes it faster; for idle time. */
-  readonly keep: () => void;
+  /** Saves the compiler cache, which makes the next start faster; called in idle time. */
+  readonly saveCache: () => void;
 }
 
-/** Builds the compiler for cells whose notebook lies in `folder`. Takes about half a second, once. */
-export function cellCompiler(folder: string, packages: readonly OwnPackage[]): CellCompiler {
+/** Builds the compiler for the cells of a notebook in `folder`. Takes about half a second, once. */
+export function cellCompiler(folder: string, packages: readonly BundledPackage[]): CellCompiler {
   const typescript = cellTypescript(folder, packages);
   const { createConverter } = load("tslab/dist/converter") as typeof import("tslab/dist/converter");
   const converter = createConverter();
   const prepare = (text: string): void => {
-    if (typescript.files.refresh()) typescript.resolution.forget();
+    if (typescript.files.refresh()) typescript.resolution.invalidate();
     if (needsNodeTypes(text)) typescript.addNodeTypes();
   };
   return {
     library: typescript.library,
-    keep: typescript.keep,
+    saveCache: typescript.saveCache,
     compile: (declarations, text) => {
       prepare(text);
-      const converted = typescript.compiling(() => quietly(() => converter.convert(declarations, text)));
-      typescript.resolution.remembered();
+      const converted = typescript.compiling(() =>
+        withoutWarnings(() => converter.convert(declarations, text)),
+      );
+      typescript.resolution.validated();
       return compiledCell(typescript, text, converted);
     },
     complete: (declarations, text, position) => {
@@ -71,8 +73,8 @@ export function cellCompiler(folder: string, packages: readonly OwnPackage[]): C
   };
 }
 
-/** The converter warns when its second pass over the program finds nothing to do, which is what we are after. */
-function quietly<T>(work: () => T): T {
+/** The converter warns when its second pass finds nothing to do, which is intended here. */
+function withoutWarnings<T>(work: () => T): T {
   const { warn } = console;
   console.warn = () => undefined;
   try {
@@ -87,7 +89,7 @@ function compiledCell(
   text: string,
   converted: ReturnType<Converter["convert"]>,
 ): CompiledCell {
-  if (converted.diagnostics.length > 0) throw new CellError(converted.diagnostics.map(complaint));
+  if (converted.diagnostics.length > 0) throw new CellError(converted.diagnostics.map(cellDiagnostic));
   const code = converted.output ?? "";
   const loopsOverWaits = hasTopLevelForAwait(typescript.library, text);
   return {
@@ -96,27 +98,27 @@ function compiledCell(
     usesAwait: converted.hasToplevelAwait === true || loopsOverWaits,
     yields: converted.hasToplevelAwait === true && !loopsOverWaits,
     lastValue: converted.lastExpressionVar,
-    findPlace: ofCell(typescript.finderOf(code), code.split("\n").length),
+    mapPosition: positionInCell(typescript.mapperOf(code), code.split("\n").length),
     modules: (converted.sideOutputs ?? []).map(({ path, data }) => ({
       path,
       code: data,
-      findPlace: typescript.finderOf(data),
+      mapPosition: typescript.mapperOf(data),
     })),
   };
 }
 
-/** The converter puts one line of its own before the text of a cell, and what runs has more after the code. */
-function ofCell(find: PlaceFinder | undefined, codeLines: number): PlaceFinder | undefined {
+/** The converter puts one line before the text of a cell, and more lines after its code. */
+function positionInCell(find: PositionMapper | undefined, codeLines: number): PositionMapper | undefined {
   if (find === undefined) return undefined;
   return (generated) => {
-    const place = generated.line <= codeLines ? find(generated) : undefined;
-    return place && place.line > 1 ? { line: place.line - 1, column: place.column } : undefined;
+    const position = generated.line <= codeLines ? find(generated) : undefined;
+    return position && position.line > 1 ? { line: position.line - 1, column: position.column } : undefined;
   };
 }
 
 const firstNonSyntaxCode = 2000;
 
-function complaint({ messageText, code, start, end, fileName }: Diagnostic): Complaint {
+function cellDiagnostic({ messageText, code, start, end, fileName }: Diagnostic): CellDiagnostic {
   return {
     text: messageText,
     isSyntax: code < firstNonSyntaxCode,

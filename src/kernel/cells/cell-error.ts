@@ -1,33 +1,35 @@
-import type { Place } from "./source-places.js";
+import type { Position } from "./source-positions.js";
 
-/** A cell that the compiler refused: nothing of it ran. */
+/** A cell that does not compile; none of it was run. */
 export class CellError extends Error {
   override readonly name: "SyntaxError" | "TypeCheckError";
-  readonly complaints: readonly Complaint[];
+  readonly diagnostics: readonly CellDiagnostic[];
 
-  constructor(complaints: readonly Complaint[]) {
-    const [first] = complaints;
-    super(first?.text ?? "The cell could not be read.");
+  constructor(diagnostics: readonly CellDiagnostic[]) {
+    const [first] = diagnostics;
+    super(first?.text ?? "The cell could not be compiled.");
     this.name = first?.isSyntax ? "SyntaxError" : "TypeCheckError";
-    this.complaints = complaints;
+    this.diagnostics = diagnostics;
   }
 }
 
-/** What the compiler, or a check of a language inside a string, has against a cell. */
-export interface Complaint {
+/** An error found in a cell by the compiler, or by the check of a language inside a string. */
+export interface CellDiagnostic {
   readonly text: string;
   readonly isSyntax: boolean;
-  readonly start: Place;
-  readonly end: Place;
-  /** The file beside the notebook it is in; absent = the cell itself. */
+  readonly start: Position;
+  readonly end: Position;
+  /** The file beside the notebook that has the error; absent = the cell itself. */
   readonly file?: string;
 }
 
-/** A cell that the user stopped. */
+/** A cell that was interrupted. */
 export class Interrupted extends Error {
   override readonly name = "Interrupted";
 
   constructor() {
-    super("The cell was stopped before it had finished. What it had set so far is kept.");
+    super(
+      "The cell was interrupted. Variables of earlier cells keep the values assigned so far; names that this cell declares are not available.",
+    );
   }
 }

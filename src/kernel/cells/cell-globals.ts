@@ -1,17 +1,16 @@
 /**
- * Declarations of what a cell may name without an import: what the kernel adds, and the small part of Node's
- * globals that cells use daily. Node's whole declarations cost a second to read, so they are read only by
- * notebooks that need them (see node-types.ts).
+ * Declarations of what a cell can use without an import: what the kernel adds, and the Node globals that cells use
+ * most. Reading all of Node's declarations takes a second, so only notebooks that need them do (see node-types.ts).
  */
 export const cellGlobals = `
-/** What is shown of a value: one representation a MIME type. */
+/** Representations of a value by MIME type. */
 type MimeBundle = { readonly [type: string]: string | object };
 /** Shows a bundle below the cell; \`update\` on what it returns replaces it. */
 declare function display(bundle: MimeBundle | Promise<MimeBundle>, options?: { display_id?: string; update?: boolean }):
   { readonly display_id: string; update(bundle: MimeBundle | Promise<MimeBundle>): void };
-/** Clears the outputs of the cell; with \`wait\`, not before the next output comes. */
+/** Clears the outputs of the cell; with \`wait\`, only when the next output comes. */
 declare function clearOutput(wait?: boolean): void;
-/** Asks the reader and resolves to the answer; with \`password\`, without showing it. */
+/** Asks the user for a line of text; with \`password\`, without showing it. */
 declare function input(prompt?: string, options?: { password?: boolean }): Promise<string>;
 `;
 

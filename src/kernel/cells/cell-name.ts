@@ -1,4 +1,4 @@
-/** The name of a cell's code in stack traces; every execution has its own. */
+/** The name of a cell's code in stack traces, unique for every execution. */
 export function cellName(serial: number): string {
   return `cell-${serial}.ts`;
 }

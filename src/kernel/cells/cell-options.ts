@@ -1,11 +1,11 @@
 import { createRequire } from "node:module";
 import { dirname, join, parse, relative } from "node:path";
 import type ts from "typescript-cell";
-import type { OwnPackage } from "./installation.js";
+import type { BundledPackage } from "./installation.js";
 import { languageLibraryName } from "./language-library.js";
 
-/** How cells are checked: strictly, and with packages resolved as Node itself resolves them. */
-export function cellOptions(library: typeof ts, packages: readonly OwnPackage[]): ts.CompilerOptions {
+/** Compiler options of cells: strict, with packages resolved as Node resolves them. */
+export function cellOptions(library: typeof ts, packages: readonly BundledPackage[]): ts.CompilerOptions {
   const load = createRequire(__filename);
   const converterPackage = dirname(load.resolve("tslab/package.json"));
   const nodeTypes = load.resolve("@types/node/package.json", { paths: [converterPackage] });
@@ -23,13 +23,13 @@ export function cellOptions(library: typeof ts, packages: readonly OwnPackage[])
 }
 
 /**
- * Where the compiler finds the kernel's own packages, and by what name it writes their types into declarations:
- * a name by path would not do, since the compiler refuses one that leads through another folder's packages.
+ * Where the compiler finds the bundled packages, and by what name it writes their types into declarations. A name by
+ * path would fail, since the compiler rejects paths into the node_modules of another folder.
  */
-function packagePaths(packages: readonly OwnPackage[]): ts.CompilerOptions {
+function packagePaths(packages: readonly BundledPackage[]): ts.CompilerOptions {
   const pathsBasePath = parse(__dirname).root.replaceAll("\\", "/");
   const fromRoot = (path: string): string => relative(pathsBasePath, path).replaceAll("\\", "/");
-  // The first that fits names a file: the package inside another's folder goes before that other.
+  // The first match wins: a package nested in another package's folder goes first.
   const innerFirst = [...packages].sort((one, other) => other.folder.length - one.folder.length);
   const entries = innerFirst.flatMap(({ name, types, folder }) => [
     [name, [fromRoot(types)]],

@@ -1,17 +1,17 @@
 import type ts from "typescript-cell";
 
-/** How imports in cells find their declarations, with a memory that can be emptied when files come or go. */
+/** Resolves imports of cells to declarations, with a cache that is invalidated when files are added or removed. */
 export interface CellResolution {
   readonly resolve: (
     names: readonly string[],
     from: string,
     options: ts.CompilerOptions,
   ) => (ts.ResolvedModuleFull | undefined)[];
-  readonly forget: () => void;
-  /** Whether what was found earlier must be looked up again; asked by the compiler for every file. */
-  readonly isForgotten: () => boolean;
-  /** Called when the compiler has looked everything up. */
-  readonly remembered: () => void;
+  readonly invalidate: () => void;
+  /** Whether earlier results must be looked up again; the compiler asks for every file. */
+  readonly isInvalidated: () => boolean;
+  /** Called when the compiler has resolved everything. */
+  readonly validated: () => void;
 }
 
 export function cellResolution(
@@ -19,21 +19,21 @@ export function cellResolution(
   folder: string,
   host: ts.ModuleResolutionHost,
 ): CellResolution {
-  let memory: ts.ModuleResolutionCache | undefined;
-  let forgotten = false;
+  let cache: ts.ModuleResolutionCache | undefined;
+  let invalidated = false;
   return {
     resolve: (names, from, options) => {
-      memory ??= library.createModuleResolutionCache(folder, (name) => name, options);
-      const known = memory;
+      cache ??= library.createModuleResolutionCache(folder, (name) => name, options);
+      const known = cache;
       return names.map((name) => library.resolveModuleName(name, from, options, host, known).resolvedModule);
     },
-    forget: () => {
-      memory = undefined;
-      forgotten = true;
+    invalidate: () => {
+      cache = undefined;
+      invalidated = true;
     },
-    isForgotten: () => forgotten,
-    remembered: () => {
-      forgotten = false;
+    isInvalidated: () => invalidated,
+    validated: () => {
+      invalidated = false;
     },
   };
 }

@@ -2,47 +2,47 @@ import { existsSync } from "node:fs";
 import { createRequire } from "node:module";
 import { relative } from "node:path";
 import type { Converter, ConvertResult } from "tslab/dist/converter";
+import { installBundledModules, type Preloaded } from "./bundled-modules.js";
 import { type CellCompiler, type CompiledCell, type CompiledModule, cellCompiler } from "./cell-compiler.js";
 import { Interrupted } from "./cell-error.js";
 import { changedModules } from "./changed-modules.js";
-import { ownPackages } from "./installation.js";
-import { installOwnModules, type Preloaded } from "./own-modules.js";
+import { bundledPackages } from "./installation.js";
 import { modulePreloader } from "./preload-modules.js";
 import { redeclaredNames } from "./redeclared-names.js";
-import type { Source, SourceRegister } from "./source-register.js";
+import type { Source, SourceRegistry } from "./source-registry.js";
 
 const load = createRequire(__filename);
 
-/** What became of a cell. `value` is that of its last expression; null and undefined are shown as nothing. */
+/** The outcome of a cell. `value` is the value of its last expression; null and undefined are not shown. */
 export type CellOutcome =
   | { readonly kind: "value"; readonly value: unknown }
   | { readonly kind: "nothing" }
   | { readonly kind: "failed"; readonly cause: unknown };
 
-/** The cells of one notebook: what earlier ones declared is there for later ones. */
+/** The cells of one notebook: later cells see what earlier ones declared. */
 export interface CellSession {
   readonly compiler: CellCompiler;
-  /** Declarations of everything that cells so far have made. */
+  /** Declarations of everything that cells have declared so far. */
   readonly declarations: () => string;
-  /** `isStopped` is asked before the cell begins: it may have been interrupted while it was compiled. */
+  /** `isStopped` is checked before the cell starts: it may have been interrupted during compilation. */
   readonly run: (
     text: string,
     name: string,
     label: string,
     isStopped?: () => boolean,
   ) => Promise<CellOutcome>;
-  /** Ends the wait of the running cell. */
+  /** Ends the await of the running cell. */
   readonly stop: () => void;
 }
 
-/** Names of what the wrapped code of a cell calls; put on the global object by the kernel. */
-export const followName = "__periodwiseFollow";
-export const stretchesName = "__periodwiseStretches";
+/** Global functions that the wrapped code of a cell calls. */
+export const trackName = "__periodwiseTrack";
+export const runBetweenAwaitsName = "__periodwiseRunBetweenAwaits";
 
-export function cellSession(folder: string, sources: SourceRegister): CellSession {
-  const packages = ownPackages();
+export function cellSession(folder: string, sources: SourceRegistry): CellSession {
+  const packages = bundledPackages();
   const preloaded: Preloaded = new Map();
-  installOwnModules(folder, packages, preloaded);
+  installBundledModules(folder, packages, preloaded);
   const preload = modulePreloader(folder, preloaded);
   const compiler = cellCompiler(folder, packages);
   const changed = changedModules();
@@ -51,9 +51,9 @@ export function cellSession(folder: string, sources: SourceRegister): CellSessio
   let declarations = "";
   let prepared: ConvertResult = { diagnostics: [] };
   let outcome: CellOutcome = { kind: "nothing" };
-  // The executor asks its converter for the cell, and says on a console what came of it.
-  const given = { convert: () => prepared } as unknown as Converter;
-  const told = {
+  // The executor takes the cell from its converter and reports the outcome on a console.
+  const preparedConverter = { convert: () => prepared } as unknown as Converter;
+  const resultConsole = {
     log: (value: unknown) => {
       outcome = { kind: "value", value };
     },
@@ -61,7 +61,11 @@ export function cellSession(folder: string, sources: SourceRegister): CellSessio
       outcome = { kind: "failed", cause };
     },
   };
-  const executor = createExecutor(folder, { node: given, browser: given, close: () => undefined }, told);
+  const executor = createExecutor(
+    folder,
+    { node: preparedConverter, browser: preparedConverter, close: () => undefined },
+    resultConsole,
+  );
 
   return {
     compiler,
@@ -71,7 +75,7 @@ export function cellSession(folder: string, sources: SourceRegister): CellSessio
       outcome = { kind: "nothing" };
       try {
         const cell = compiler.compile(declarations, text);
-        sources.add({ name, label, text, findPlace: cell.findPlace });
+        sources.add({ name, label, text, mapPosition: cell.mapPosition });
         for (const module of cell.modules) sources.add(moduleSource(folder, module));
         const modules = changed.withDependents(cell.modules);
         await preload([cell.code, ...cell.modules.map(({ code }) => code)]);
@@ -83,18 +87,18 @@ export function cellSession(folder: string, sources: SourceRegister): CellSessio
       } catch (cause) {
         outcome = { kind: "failed", cause };
       }
-      return outcome.kind === "failed" ? { kind: "failed", cause: stopCause(outcome.cause) } : outcome;
+      return outcome.kind === "failed" ? { kind: "failed", cause: interruptedOr(outcome.cause) } : outcome;
     },
   };
 }
 
-function moduleSource(folder: string, { path, findPlace }: CompiledModule): Source {
+function moduleSource(folder: string, { path, mapPosition }: CompiledModule): Source {
   const written =
     [".ts", ".tsx"].map((end) => path.replace(/\.js$/, end)).find((one) => existsSync(one)) ?? path;
-  return { name: path, label: relative(folder, written), file: written, findPlace };
+  return { name: path, label: relative(folder, written), file: written, mapPosition: mapPosition };
 }
 
-/** The cell as the executor takes it, with its name for stack traces. */
+/** The cell in the form of the executor, with its name for stack traces. */
 function executable(cell: CompiledCell, modules: readonly CompiledModule[], name: string): ConvertResult {
   return {
     output: `${bodyOf(cell)}\n//# sourceURL=${name}`,
@@ -106,14 +110,14 @@ function executable(cell: CompiledCell, modules: readonly CompiledModule[], name
   };
 }
 
-/** A map counts the lines of the code alone, so what goes around it stays on a line of its own. */
+/** Source maps count the lines of the code alone, so the wrapper stays on lines of its own. */
 function bodyOf({ code, usesAwait, yields }: CompiledCell): string {
   if (!usesAwait) return `\n${code}`;
-  if (yields) return `await ${followName}(${stretchesName}(function* () {\n${code}\n}))`;
-  return `await ${followName}((async () => {\n${code}\n})())`;
+  if (yields) return `await ${trackName}(${runBetweenAwaitsName}(function* () {\n${code}\n}))`;
+  return `await ${trackName}((async () => {\n${code}\n})())`;
 }
 
-/** A failed cell leaves earlier values: names it declared again get their former value back. */
+/** After a failed cell, names that it redeclared get their former values back. */
 function restore(locals: Record<string, unknown>, before: Record<string, unknown>, cell: CompiledCell): void {
   for (const name of redeclaredNames(cell.code)) {
     if (Object.hasOwn(before, name)) locals[name] = before[name];
@@ -121,7 +125,7 @@ function restore(locals: Record<string, unknown>, before: Record<string, unknown
   if (cell.lastValue !== undefined) delete locals[cell.lastValue];
 }
 
-function stopCause(cause: unknown): unknown {
+function interruptedOr(cause: unknown): unknown {
   if (!(cause instanceof Error)) return cause;
   const code = (cause as NodeJS.ErrnoException).code;
   const stopped =

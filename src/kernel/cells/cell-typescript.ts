@@ -4,39 +4,39 @@ import type ts from "typescript-cell";
 import { cellBuilder } from "./cell-builder.js";
 import { cellOptions } from "./cell-options.js";
 import { type CellResolution, cellResolution } from "./cell-resolution.js";
+import { type CommonJsStage, commonJsStage } from "./commonjs-stage.js";
 import { compilerLibrary, compilerPath } from "./compiler-library.js";
 import { declarationTexts } from "./declaration-texts.js";
 import { exportedText } from "./exported-text.js";
-import type { OwnPackage } from "./installation.js";
-import { type SecondStage, secondStage } from "./second-stage.js";
+import type { BundledPackage } from "./installation.js";
 import { withHints } from "./type-hints.js";
 import { type WatchedFiles, watchedFiles } from "./watched-files.js";
 
-/** The compiler as the cell converter gets it, and the doors to what we changed about it. */
+/** The compiler as the cell converter gets it, with handles on what was changed. */
 export interface CellTypescript {
   readonly library: typeof ts;
   readonly files: WatchedFiles;
   readonly resolution: CellResolution;
-  readonly finderOf: SecondStage["finderOf"];
-  /** From now on cells may name everything that Node declares. */
+  readonly mapperOf: CommonJsStage["mapperOf"];
+  /** Makes all of Node's declarations available to cells. */
   readonly addNodeTypes: () => void;
-  /** From now on the declarations of the language and of our package have their docstrings. */
+  /** Adds the docstrings to the declarations of the language and of this package. */
   readonly addDocs: () => void;
-  /** Does work on a cell that is to be run, not only looked at. */
+  /** Does work on a cell that will be run, not only inspected. */
   readonly compiling: <T>(work: () => T) => T;
-  /** Keeps for the next start what makes it faster. */
-  readonly keep: () => void;
+  /** Saves the compiler cache for the next start. */
+  readonly saveCache: () => void;
 }
 
 /**
- * Loads the compiler and puts an altered copy in its place before the converter is loaded, because the
- * compiler's exports are getters and assigning to them does nothing.
+ * Loads the compiler and replaces it by an altered copy before the converter is loaded, because the compiler's exports
+ * are getters and cannot be assigned.
  */
-export function cellTypescript(folder: string, packages: readonly OwnPackage[]): CellTypescript {
-  const { library, keep } = compilerLibrary();
+export function cellTypescript(folder: string, packages: readonly BundledPackage[]): CellTypescript {
+  const { library, saveCache } = compilerLibrary();
   const files = watchedFiles(library, folder);
   const resolution = cellResolution(library, folder, library.sys);
-  const stage = secondStage(library);
+  const stage = commonJsStage(library);
   const texts = declarationTexts(folder);
   const exported = exportedText(library);
   const cellFile = join(folder, "__tslab__.ts").replaceAll("\\", "/");
@@ -72,24 +72,24 @@ export function cellTypescript(folder: string, packages: readonly OwnPackage[]):
         return compiles && path === cellFile && text !== undefined ? exported.of(text) : text;
       };
       host.resolveModuleNames = (names, from) => resolution.resolve(names, from, options);
-      host.hasInvalidatedResolutions = resolution.isForgotten;
+      host.hasInvalidatedResolutions = resolution.isInvalidated;
       return host;
     },
     transpileModule: stage.transpile,
-    // The converter's compiler has this function beyond those it declares.
+    // The converter's compiler has this function, although it does not declare it.
     getPreEmitDiagnosticsOfFiles: (program: ts.Program, given: readonly ts.SourceFile[]) => {
-      const complain = Reflect.get(library, "getPreEmitDiagnosticsOfFiles") as PreEmitDiagnostics;
-      return withHints(library, program, complain(program, given));
+      const diagnose = Reflect.get(library, "getPreEmitDiagnosticsOfFiles") as PreEmitDiagnostics;
+      return withHints(library, program, diagnose(program, given));
     },
   };
-  // The converter finds this module where it looks for the compiler.
+  // The converter finds this module when it looks for the compiler.
   const load = createRequire(__filename);
   load.cache[compilerPath] = { exports: altered, loaded: true } as NodeJS.Module;
   return {
     library,
     files,
     resolution,
-    finderOf: stage.finderOf,
+    mapperOf: stage.mapperOf,
     addNodeTypes: () => {
       for (const path of texts.addNodeTypes()) files.report(path);
     },
@@ -104,7 +104,7 @@ export function cellTypescript(folder: string, packages: readonly OwnPackage[]):
         compiles = false;
       }
     },
-    keep,
+    saveCache,
   };
 }
 

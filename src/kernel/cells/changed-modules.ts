@@ -2,8 +2,8 @@ import { dirname, resolve } from "node:path";
 import type { CompiledModule } from "./cell-compiler.js";
 
 /**
- * The files beside the notebook that must run again: those compiled anew, and those that import one of them,
- * which would go on holding what it gave before.
+ * The files beside the notebook that must run again: those that were compiled again, and those that import one of them
+ * and would keep its old exports.
  */
 export interface ChangedModules {
   readonly withDependents: (compiled: readonly CompiledModule[]) => readonly CompiledModule[];

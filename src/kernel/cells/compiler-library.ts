@@ -9,34 +9,34 @@ import { cacheFolder } from "./cache-folder.js";
 const load = createRequire(__filename);
 const converterPackage = dirname(load.resolve("tslab/package.json"));
 
-/** Where the compiler that the cell converter uses lies. */
+/** Path of the compiler that the cell converter uses. */
 export const compilerPath: string = load.resolve("@tslab/typescript-for-tslab", {
   paths: [converterPackage],
 });
 
 const heapSetting = "--heap-growing-percent=20";
 
-/** The compiler, and how to keep what Node made of its text for the next start. */
+/** The compiler, and a function that saves its compiled code for the next start. */
 export interface CompilerLibrary {
   readonly library: typeof ts;
-  readonly keep: () => void;
+  readonly saveCache: () => void;
 }
 
 /**
- * Loads the compiler from its text and, if an earlier start kept it, from the code that Node made of that text:
- * it is eight megabytes, and reading them anew is a third of the time until the first cell can run.
+ * Loads the compiler, from cached code if an earlier start saved it: the text has eight megabytes, and compiling it is
+ * a third of the time to the first cell.
  */
 export function compilerLibrary(): CompilerLibrary {
-  // Every cell leaves a whole program of the compiler behind. By itself Node would let the heap double before it
-  // tidies up old things. Set before the code is read, because kept code is bound to Node's settings.
+  // Every cell leaves a whole compiler program behind, and by default Node lets the heap double before a full garbage
+  // collection. Set before the code is read, because cached code is bound to Node's settings.
   setFlagsFromString(heapSetting);
-  // Beyond ASCII it has characters only in comments (a test looks), and read so it takes half the memory.
+  // Characters beyond ASCII occur only in comments (a test checks), and latin1 takes half the memory.
   const text = readFileSync(compilerPath, "latin1");
   const settings = [process.version, process.arch, ...process.execArgv, heapSetting]
     .join("")
     .replace(/\W+/g, "-");
-  const kept = join(cacheFolder(), `compiler-${settings}-${text.length}.bin`);
-  const cachedData = read(kept);
+  const cacheFile = join(cacheFolder(), `compiler-${settings}-${text.length}.bin`);
+  const cachedData = read(cacheFile);
   const script = new Script(Module.wrap(text), {
     filename: compilerPath,
     ...(cachedData ? { cachedData } : {}),
@@ -47,7 +47,10 @@ export function compilerLibrary(): CompilerLibrary {
   const run = script.runInThisContext() as (...names: readonly unknown[]) => void;
   run(module.exports, createRequire(compilerPath), module, compilerPath, dirname(compilerPath));
   const isFresh = cachedData !== undefined && script.cachedDataRejected !== true;
-  return { library: module.exports as typeof ts, keep: () => void (isFresh || write(kept, script)) };
+  return {
+    library: module.exports as typeof ts,
+    saveCache: () => void (isFresh || write(cacheFile, script)),
+  };
 }
 
 function read(path: string): Buffer | undefined {
@@ -58,7 +61,7 @@ function read(path: string): Buffer | undefined {
   }
 }
 
-/** A cache that cannot be written costs time at the next start and nothing else. */
+/** Without a cache the next start is slower; nothing else is lost. */
 function write(path: string, script: Script): void {
   try {
     mkdirSync(dirname(path), { recursive: true });

@@ -6,17 +6,17 @@ import { installationFolder } from "./installation.js";
 import { isInLanguageLibrary, languageLibrary, languageLibraryName } from "./language-library.js";
 
 /**
- * The declarations that come with the kernel, as the compiler is to read them. Reading is most of what a first
- * import costs, so docstrings are left out until somebody asks for one, and Node's declarations until a cell
- * names something of Node's, even where a package refers to them.
+ * The declarations that come with the kernel, as the compiler reads them. Reading is most of the cost of a first
+ * import, so docstrings are omitted until one is requested, and Node's declarations until a cell uses one of them,
+ * even where a package refers to them.
  */
 export interface DeclarationTexts {
-  /** A file that is nowhere on disk: what cells may name without an import. */
+  /** A virtual file: what cells can use without an import. */
   readonly globalsFile: string;
   readonly isVirtual: (path: string) => boolean;
-  /** The text of a file, where it is not simply what is on disk. */
+  /** The text of a file where it differs from the one on disk. */
   readonly read: (path: string) => string | undefined;
-  /** These tell which files are to be read again. */
+  /** Returns the files to be read again. */
   readonly addNodeTypes: () => readonly string[];
   readonly addDocs: () => readonly string[];
 }
@@ -29,7 +29,7 @@ export function declarationTexts(folder: string): DeclarationTexts {
   const libraryFile = inFolder(dirname(compilerPath), languageLibraryName);
   const installation = inFolder(installationFolder(), "");
   const built = inFolder(installationFolder(), "dist/");
-  const bare = new Set<string>();
+  const withoutDocs = new Set<string>();
   let nodeTypes = false;
   let docs = false;
 
@@ -40,7 +40,7 @@ export function declarationTexts(folder: string): DeclarationTexts {
     const text = readFileSync(path, "utf8").replace(nodeReference, "");
     const isOwn = path.startsWith(built);
     if (docs && isOwn) return text;
-    if (isOwn) bare.add(path);
+    if (isOwn) withoutDocs.add(path);
     return text.replace(docstring, "");
   };
   const addOnce = (wasThere: boolean, changed: readonly string[]): readonly string[] =>
@@ -61,7 +61,7 @@ export function declarationTexts(folder: string): DeclarationTexts {
       return changed;
     },
     addDocs: () => {
-      const changed = addOnce(docs, [libraryFile, ...bare]);
+      const changed = addOnce(docs, [libraryFile, ...withoutDocs]);
       docs = true;
       return changed;
     },

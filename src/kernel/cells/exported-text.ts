@@ -1,8 +1,8 @@
 import type ts from "typescript-cell";
 
 /**
- * Adds to a cell's text the export of all that it declares, as the converter would in a second pass over the
- * program. Done while the text is read, it spares that pass.
+ * Adds to a cell's text the export of everything it declares, as the converter would in a second pass over the
+ * program. Done while the text is read, it saves that pass.
  */
 export interface ExportedText {
   readonly of: (text: string) => string;
@@ -13,7 +13,7 @@ export function exportedText(library: typeof ts): ExportedText {
   let last = "";
   return {
     of: (text) => {
-      // The converter's second pass asks with the export already there.
+      // In the second pass of the converter the export is already there.
       if (text === last) return text;
       const file = library.createSourceFile("cell.ts", text, library.ScriptTarget.ES2022, true);
       bind(file, {});

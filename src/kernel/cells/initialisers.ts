@@ -1,14 +1,14 @@
 import { createRequire } from "node:module";
 import type ts from "typescript-cell";
 
-/** A top-level `const name = value` or `let name = value` of a cell: where its value stands in the text. */
+/** A top-level `const name = value` or `let name = value` of a cell, with the position of its value. */
 export interface Initialiser {
   readonly name: string;
   readonly start: number;
   readonly end: number;
 }
 
-/** Finds the top-level values of a cell that can be replaced by another. Positions are UTF-16 units. */
+/** Finds the top-level values of a cell that can be replaced. Positions are UTF-16 units. */
 export function initialisers(text: string): readonly Initialiser[] {
   const load = createRequire(__filename);
   const converter = load.resolve("tslab/package.json");

@@ -2,11 +2,11 @@ import { existsSync, realpathSync } from "node:fs";
 import { createRequire } from "node:module";
 import { dirname, join } from "node:path";
 
-/** A package that every cell can import, wherever its notebook is: the kernel's own copy of it. */
-export interface OwnPackage {
+/** A package that every cell can import from any folder: the kernel's own copy of it. */
+export interface BundledPackage {
   readonly name: string;
   readonly folder: string;
-  /** The file that `require` gives. */
+  /** The file that `require` loads. */
   readonly program: string;
   /** The declarations that cells are checked against. */
   readonly types: string;
@@ -20,8 +20,8 @@ export function installationFolder(from: string = __dirname): string {
   return installationFolder(dirname(from));
 }
 
-/** The packages given to every cell, as this installation has them. */
-export function ownPackages(): readonly OwnPackage[] {
+/** The packages available to every cell. */
+export function bundledPackages(): readonly BundledPackage[] {
   const require = createRequire(__filename);
   return names.flatMap((name) => {
     const found = folderOf(name, require);

@@ -1,68 +1,74 @@
-import { presentRun, type Run } from "../output/run.js";
-import { pause } from "../transport/pause.js";
+import { currentRun, type Run } from "../output/run.js";
+import { interruptFlag } from "../transport/interrupt-flag.js";
 import { Interrupted } from "./cell-error.js";
-import { haltName, pauseName } from "./loop-checks.js";
+import { flagName, stopName } from "./interrupt-checks.js";
 
-/** Stops cells. The transport thread raises the flag; this obeys it, once. */
+/** Stops cells. The transport thread sets the flag; the kernel's thread acts on it, once. */
 export interface Interrupts {
-  /** Called before a cell runs; `stop` ends its waiting. */
+  /** Called before a cell runs; `stop` ends its await. */
   readonly begin: (run: Run, stop: () => void) => void;
-  /** Called when the cell has been answered. */
+  /** Called when the reply of the cell has been sent. */
   readonly end: () => void;
-  /** Called with the number of an interrupt when the main thread hears of it. */
-  readonly heard: (count: number) => void;
-  /** Follows work that a cell is still waiting for, so that the flag is lowered once it has ended. */
-  readonly follow: <T>(work: Promise<T>) => Promise<T>;
+  /** Called with the number of an interrupt when the main thread receives it. */
+  readonly received: (count: number) => void;
+  /** Tracks work that a cell still awaits, so that the flag is reset once it has ended. */
+  readonly track: <T>(work: Promise<T>) => Promise<T>;
 }
 
 export const interruptQuestion: unique symbol = Symbol.for("periodwise.interrupt") as never;
 
 export function interrupts(shared: Int32Array): Interrupts {
-  let obeyed = 0;
+  let handledCount = 0;
   let running: { readonly run: Run; readonly stop: () => void } | undefined;
   const lingering = new Set<Run>();
 
-  const settle = (): void => {
-    obeyed = Atomics.load(shared, pause.countAt);
-    Atomics.store(shared, pause.stateAt, lingering.size > 0 ? pause.lingering : pause.none);
+  const updateFlag = (): void => {
+    handledCount = Atomics.load(shared, interruptFlag.countAt);
+    Atomics.store(
+      shared,
+      interruptFlag.stateAt,
+      lingering.size > 0 ? interruptFlag.lingering : interruptFlag.none,
+    );
   };
-  const mustStop = (): boolean => {
-    const state = shared[pause.stateAt];
-    return state === pause.fresh || (state === pause.lingering && presentRun()?.stopped === true);
+  const shouldStop = (): boolean => {
+    const state = shared[interruptFlag.stateAt];
+    return (
+      state === interruptFlag.fresh || (state === interruptFlag.lingering && currentRun()?.stopped === true)
+    );
   };
-  const halt = (): void => {
-    if (mustStop()) throw new Interrupted();
+  const stop = (): void => {
+    if (shouldStop()) throw new Interrupted();
   };
   const hidden = { enumerable: false, configurable: true, writable: false };
-  Object.defineProperty(globalThis, pauseName, { ...hidden, value: shared });
-  Object.defineProperty(globalThis, haltName, { ...hidden, value: halt });
-  Object.defineProperty(globalThis, interruptQuestion, { ...hidden, value: mustStop });
+  Object.defineProperty(globalThis, flagName, { ...hidden, value: shared });
+  Object.defineProperty(globalThis, stopName, { ...hidden, value: stop });
+  Object.defineProperty(globalThis, interruptQuestion, { ...hidden, value: shouldStop });
 
   return {
     begin: (run, stop) => {
       running = { run, stop };
-      settle();
+      updateFlag();
     },
     end: () => {
       running = undefined;
-      // An interrupt that came while the cell was ending must not reach the next one.
-      settle();
+      // An interrupt that arrives while a cell ends must not stop the next one.
+      updateFlag();
     },
-    heard: (count) => {
-      if (count <= obeyed) return;
+    received: (count) => {
+      if (count <= handledCount) return;
       if (running !== undefined) {
         running.run.stopped = true;
         running.stop();
       }
-      settle();
+      updateFlag();
     },
-    follow: (work) => {
-      const run = presentRun();
+    track: (work) => {
+      const run = currentRun();
       if (run === undefined) return work;
       lingering.add(run);
       return work.finally(() => {
         lingering.delete(run);
-        if (shared[pause.stateAt] === pause.lingering) settle();
+        if (shared[interruptFlag.stateAt] === interruptFlag.lingering) updateFlag();
       });
     },
   };

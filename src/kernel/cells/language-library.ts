@@ -1,15 +1,15 @@
 import { readFileSync } from "node:fs";
 import { basename, dirname, join } from "node:path";
 
-/** The file that stands for the declarations of the language itself. */
+/** Virtual file with the declarations of the language itself. */
 export const languageLibraryName = "lib.cell.d.ts";
 
 const reference = /^\/\/\/ <reference lib="([^"]+)" *\/>\r?\n?/gm;
 
 /**
- * The declarations of the language (ES2022), from many files of the compiler put into one. A type spread over
- * many files is put together anew for every cell; within one file that is done once. Its docstrings are left
- * out until somebody asks for one, because reading them takes as long as reading the rest.
+ * The declarations of the language (ES2022), merged from many files of the compiler into one. A type that is spread over
+ * many files is merged again for every cell; within one file that is done once. Docstrings are omitted until one is
+ * requested, because reading them takes as long as reading the rest.
  */
 export function languageLibrary(compilerPath: string, withDocs: boolean): string {
   const folder = dirname(compilerPath);
@@ -25,7 +25,7 @@ export function languageLibrary(compilerPath: string, withDocs: boolean): string
   return withDocs ? text : text.replace(/\/\*.*?\*\//gs, "");
 }
 
-/** Whether a file is one of those that went into the one file; packages refer to them by name. */
+/** Whether a file is one of the merged files; packages refer to them by name. */
 export function isInLanguageLibrary(compilerPath: string, path: string): boolean {
   const isLibrary = dirname(path) === dirname(compilerPath).replaceAll("\\", "/");
   return isLibrary && /^lib\.es(5|6|20\d\d)[\w.]*\.d\.ts$/.test(basename(path));

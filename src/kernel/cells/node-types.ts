@@ -7,7 +7,7 @@ const names =
 const builtIns = builtinModules.filter((name) => !name.startsWith("_")).join("|");
 const mentions = new RegExp(`\\b(?:${names})\\b|["'](?:node:[\\w/]+|(?:${builtIns}))["']`);
 
-/** Whether a cell's text names anything that only Node's own declarations describe. */
+/** Whether a cell's text uses anything that only Node's declarations describe. */
 export function needsNodeTypes(code: string): boolean {
   return mentions.test(code);
 }

@@ -1,16 +1,16 @@
 import { createRequire, isBuiltin } from "node:module";
 import { join } from "node:path";
 import vm from "node:vm";
-import type { Preloaded } from "./own-modules.js";
+import type { Preloaded } from "./bundled-modules.js";
 
-/** Loads, before a cell runs, the packages it imports that only `import` can load. */
+/** Loads, before a cell runs, the packages that only `import` can load. */
 export type Preload = (codes: readonly string[]) => Promise<void>;
 
 const requires = /\brequire\(("(?:[^"\\\n]|\\.)*")\)/g;
 
 export function modulePreloader(folder: string, preloaded: Preloaded): Preload {
   const require = createRequire(join(folder, "cell.js"));
-  // A script under the notebook's folder imports as a file there would.
+  // A script with a file name in the notebook's folder resolves imports as a file there would.
   const importFrom = new vm.Script("(name) => import(name)", {
     filename: join(folder, "cell.js"),
     importModuleDynamically: vm.constants.USE_MAIN_CONTEXT_DEFAULT_LOADER,
@@ -29,7 +29,7 @@ function importedNames(codes: readonly string[]): ReadonlySet<string> {
   return new Set(names.filter((name) => !name.startsWith(".") && !name.startsWith("/")));
 }
 
-/** Whether `require` would refuse the package or has only an ES module of it to give. */
+/** Whether `require` would reject the package or find only an ES module. */
 function needsImport(require: NodeJS.Require, name: string): boolean {
   try {
     return require.resolve(name).endsWith(".mjs");
@@ -38,7 +38,7 @@ function needsImport(require: NodeJS.Require, name: string): boolean {
   }
 }
 
-/** An ES module in the form in which compiled code expects it from `require`. */
+/** An ES module in the form that compiled code expects from `require`. */
 function asRequired(module: object): object {
   const required: object = Object.defineProperty({}, "__esModule", { value: true });
   for (const name of Object.keys(module)) {

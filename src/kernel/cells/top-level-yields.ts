@@ -2,8 +2,8 @@ import type ts from "typescript-cell";
 import { hasTopLevelForAwait } from "./top-level-for-await.js";
 
 /**
- * Turns the top-level waits of a cell into yields, so that the cell can be run as a generator, stretch by
- * stretch, and stopped within any of them (see run-in-stretches.ts). A cell with `for await` stays as it is.
+ * Turns the top-level awaits of a cell into yields, so that the cell can be run as a generator and stopped between any
+ * two of them (see run-between-awaits.ts). A cell with `for await` is left unchanged.
  */
 export function topLevelYields(library: typeof ts): ts.TransformerFactory<ts.SourceFile> {
   const { factory } = library;

@@ -1,18 +1,18 @@
 import type ts from "typescript-cell";
 
-const shownChoices = 14;
-const alikeFrom = 0.3;
+const maxChoices = 14;
+const similarityThreshold = 0.3;
 
-/** The values that a choice admits: `It can be "debts", "cultures" or "stock".` */
+/** The values of a union: `Allowed values: "debts", "cultures", "stock".` */
 export function choicesOf(checker: ts.TypeChecker, value: ts.Expression): string | undefined {
   const wanted = checker.getContextualType(value);
   const values = wanted?.isUnion() ? wanted.types.filter((one) => one.isLiteral()) : [];
   return values.length < 2
     ? undefined
-    : `It can be ${values.map((one) => checker.typeToString(one)).join(", ")}.`;
+    : `Allowed values: ${values.map((one) => checker.typeToString(one)).join(", ")}.`;
 }
 
-/** The fields that an object may have there; those it must have with their types, the most alike name first. */
+/** The fields that an object can have there, the most similar name first; required ones with their types. */
 export function fieldsOf(
   library: typeof ts,
   checker: ts.TypeChecker,
@@ -22,13 +22,15 @@ export function fieldsOf(
   const wanted = checker.getContextualType(value);
   const names = wanted === undefined ? [] : fieldNames(library, checker, wanted, value);
   if (names.length === 0) return undefined;
-  const alike =
-    given === undefined ? names : [...names].sort((a, b) => likeness(b, given) - likeness(a, given));
-  const more = names.length > shownChoices ? `, and ${names.length - shownChoices} more` : "";
-  return `The fields there are ${alike.slice(0, shownChoices).join(", ")}${more}.`;
+  const bySimilarity =
+    given === undefined
+      ? names
+      : [...names].sort((a, b) => bigramSimilarity(b, given) - bigramSimilarity(a, given));
+  const more = names.length > maxChoices ? `, and ${names.length - maxChoices} more` : "";
+  return `Available fields: ${bySimilarity.slice(0, maxChoices).join(", ")}${more}.`;
 }
 
-/** The argument that a call lacks, with its type and the fields that it must have. */
+/** The missing argument of a call, with its type and required fields. */
 export function missingArgument(
   library: typeof ts,
   checker: ts.TypeChecker,
@@ -44,14 +46,14 @@ export function missingArgument(
   if (parameter === undefined) return undefined;
   const type = checker.getTypeOfSymbolAtLocation(parameter, call);
   const required = fieldNames(library, checker, type, call).filter((field) => field.includes(":"));
-  // What has a kind is a result of another command, not something to be written out.
+  // A type with a kind is the result of another function, not something to write out.
   const isResult = required.some((field) => field.startsWith("kind:"));
   const isOptions = required.length > 0 && !isResult && type.isClassOrInterface();
-  const fields = isOptions ? `, which must have ${required.join(", ")}` : "";
-  return `The argument "${parameter.name}" is missing: ${checker.typeToString(type)}${fields}.`;
+  const fields = isOptions ? ` with ${required.join(", ")}` : "";
+  return `Argument \`${parameter.name}\` is missing: ${checker.typeToString(type)}${fields}.`;
 }
 
-/** Optional fields by name, required ones as `name: type`, choices written out. */
+/** Optional fields by name, required ones as `name: type`, with unions written out. */
 function fieldNames(
   library: typeof ts,
   checker: ts.TypeChecker,
@@ -60,20 +62,20 @@ function fieldNames(
 ): readonly string[] {
   const parts = type.isUnion() ? type.types : [type];
   const fields = parts.flatMap((part) => [...checker.getPropertiesOfType(part)]);
-  const told = fields.map((field) => {
+  const described = fields.map((field) => {
     if (field.flags & library.SymbolFlags.Optional) return field.name;
     const own = checker.getTypeOfSymbolAtLocation(field, at);
     return `${field.name}: ${checker.typeToString(own, undefined, library.TypeFormatFlags.InTypeAlias)}`;
   });
-  return [...new Set(told)];
+  return [...new Set(described)];
 }
 
-/** How many pairs of neighbouring letters a field's name shares with what was written. */
-function likeness(field: string, given: string): number {
+/** Share of the letter pairs (bigrams) that a field's name has in common with the text given. */
+function bigramSimilarity(field: string, given: string): number {
   const name = field.replace(/:.*/s, "").toLowerCase();
   const pairs = Array.from({ length: Math.max(1, given.length - 1) }, (_, i) =>
     given.toLowerCase().slice(i, i + 2),
   );
   const share = pairs.filter((pair) => name.includes(pair)).length / Math.max(name.length, given.length);
-  return share < alikeFrom ? 0 : share;
+  return share < similarityThreshold ? 0 : share;
 }

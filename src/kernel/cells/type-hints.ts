@@ -1,15 +1,16 @@
 import type ts from "typescript-cell";
+import { adviceFor, withoutProjectSettings } from "./project-advice.js";
 import { choicesOf, fieldsOf, missingArgument } from "./type-choices.js";
 
-/** Codes of the compiler's messages, by what it does not say with them. */
+/** Compiler error codes, by the information that their messages lack. */
 const unknownProperty = [2353, 2561];
 const missingProperty = [2739, 2740, 2741];
 const wrongValue = [2322, 2345, 2820];
 const fewArguments = [2554, 2555];
 
 /**
- * Adds to the compiler's messages what could stand there instead: the properties of the options, the values of
- * a choice, the argument that is missing.
+ * Adds to the compiler's messages what to write instead: the available properties, the allowed values, the missing
+ * argument, the package to install.
  */
 export function withHints(
   library: typeof ts,
@@ -17,8 +18,9 @@ export function withHints(
   diagnostics: readonly ts.Diagnostic[],
 ): readonly ts.Diagnostic[] {
   return diagnostics.map((diagnostic) => {
-    const hint = hintFor(library, program.getTypeChecker(), diagnostic);
-    return hint === undefined ? diagnostic : { ...diagnostic, messageText: extended(diagnostic, hint) };
+    const plain = { ...diagnostic, messageText: withoutProjectSettings(diagnostic.messageText) };
+    const hint = adviceFor(plain) ?? hintFor(library, program.getTypeChecker(), plain);
+    return hint === undefined ? plain : { ...plain, messageText: extended(plain, hint) };
   });
 }
 
@@ -38,7 +40,7 @@ function hintFor(library: typeof ts, checker: ts.TypeChecker, diagnostic: ts.Dia
   return has(wrongValue) ? choicesOf(checker, value) : undefined;
 }
 
-/** The innermost node that spans the place, or the one around it. */
+/** The innermost node that spans the range. */
 function deepestNode(library: typeof ts, file: ts.SourceFile, start: number, end: number): ts.Node {
   let found: ts.Node = file;
   const visit = (node: ts.Node): void => {

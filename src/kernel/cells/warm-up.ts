@@ -1,5 +1,5 @@
 import { cellCompiler } from "./cell-compiler.js";
-import { ownPackages } from "./installation.js";
+import { bundledPackages } from "./installation.js";
 
 const sample = [
   "const level: number = 1;",
@@ -7,10 +7,10 @@ const sample = [
   "[1, 2].map((n) => next(n) + level)",
 ].join("\n");
 
-/** Does once what every start does, and keeps what Node made of the compiler's text, so that starts are faster. */
+/** Compiles sample cells and saves the compiler cache, so that later starts are faster. */
 export function warmUp(folder: string): void {
-  const compiler = cellCompiler(folder, ownPackages());
+  const compiler = cellCompiler(folder, bundledPackages());
   let declarations = "";
   for (let round = 0; round < 5; round++) declarations = compiler.compile(declarations, sample).declarations;
-  compiler.keep();
+  compiler.saveCache();
 }

@@ -3,13 +3,12 @@ import { dirname, join } from "node:path";
 import type ts from "typescript-cell";
 
 /**
- * Stands in for the compiler's file watching. Nothing is watched in the background: before a cell is compiled
- * `refresh` looks at the files beside the notebook and reports those that changed, so that a cell always sees
- * what is on disk when it runs.
+ * Replaces the compiler's file watching. Nothing is watched in the background: before a cell is compiled, `refresh`
+ * checks the files beside the notebook and reports those that changed, so that a cell always sees what is on disk.
  */
 export interface WatchedFiles {
   readonly watchFile: NonNullable<ts.System["watchFile"]>;
-  /** Reports changed files to the compiler; true when files came or went, so that an import may mean another. */
+  /** Reports changed files to the compiler; true when files were added or removed, so that imports may resolve differently. */
   readonly refresh: () => boolean;
   readonly report: (path: string) => void;
 }
@@ -57,7 +56,7 @@ export function watchedFiles(library: typeof ts, folder: string): WatchedFiles {
   };
 }
 
-/** Changes whenever the file does; 0 for none. A folder's own time changes when entries come or go. */
+/** Changes whenever the file does; 0 for none. The time of a folder changes when entries are added or removed. */
 function stampOf(path: string): number {
   const stat = statSync(path, { throwIfNoEntry: false });
   if (stat === undefined) return 0;

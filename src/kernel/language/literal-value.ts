@@ -1,6 +1,6 @@
 import type ts from "typescript-cell";
 
-/** The value of an expression that is written out; `undefined` for all that would have to be run. */
+/** The value of a literal expression; `undefined` for anything that would have to be run. */
 export function literalValue(library: typeof ts, node: ts.Expression): unknown {
   if (library.isStringLiteralLike(node)) return node.text;
   if (library.isNumericLiteral(node)) return Number(node.text);
@@ -14,7 +14,7 @@ function allKnown(values: readonly unknown[]): readonly unknown[] | undefined {
   return values.includes(undefined) ? undefined : values;
 }
 
-/** Properties that are not written out are there with the value undefined. */
+/** Properties that are not literals have the value undefined. */
 function objectValue(library: typeof ts, node: ts.ObjectLiteralExpression): object | undefined {
   const read: Record<string, unknown> = {};
   for (const property of node.properties) {

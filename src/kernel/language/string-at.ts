@@ -5,11 +5,11 @@ import type { StringLanguage } from "./string-language.js";
 /** A string of a cell that is written in one of the registered languages. */
 export interface LanguageString {
   readonly language: StringLanguage;
-  /** What the cell has between the quotes. Strings with escapes or insertions are left alone. */
+  /** The text between the quotes. Strings with escapes or substitutions are ignored. */
   readonly text: string;
-  /** Where that begins in the cell, in UTF-16 units. */
+  /** Its start in the cell, in UTF-16 units. */
   readonly start: number;
-  /** The arguments after it, as far as they are written out. */
+  /** The arguments after it, as far as they are literals. */
   readonly others: readonly unknown[];
 }
 
@@ -37,7 +37,7 @@ export function languageStrings(
   return found;
 }
 
-/** The string of a registered language that the position is inside of. */
+/** The string of a registered language around the position. */
 export function stringAt(
   library: typeof ts,
   languages: readonly StringLanguage[],

@@ -1,6 +1,6 @@
 import type ts from "typescript-cell";
-import { CellError, type Complaint } from "../cells/cell-error.js";
-import type { Place } from "../cells/source-places.js";
+import { type CellDiagnostic, CellError } from "../cells/cell-error.js";
+import type { Position } from "../cells/source-positions.js";
 import { languageStrings } from "./string-at.js";
 import type { StringLanguage } from "./string-language.js";
 
@@ -10,21 +10,21 @@ export function stringErrors(
   languages: readonly StringLanguage[],
   cell: string,
 ): { readonly kind: "failed"; readonly cause: CellError } | undefined {
-  const complaints = languageStrings(library, languages, cell).flatMap(
+  const diagnostics = languageStrings(library, languages, cell).flatMap(
     ({ language, text, start: at, others }) =>
       language.check(text, others).map(
-        ({ start, end, text: told }): Complaint => ({
-          text: told,
+        ({ start, end, text: message }): CellDiagnostic => ({
+          text: message,
           isSyntax: true,
-          start: placeAt(cell, at + start),
-          end: placeAt(cell, at + end),
+          start: positionAt(cell, at + start),
+          end: positionAt(cell, at + end),
         }),
       ),
   );
-  return complaints.length === 0 ? undefined : { kind: "failed", cause: new CellError(complaints) };
+  return diagnostics.length === 0 ? undefined : { kind: "failed", cause: new CellError(diagnostics) };
 }
 
-function placeAt(text: string, position: number): Place {
+function positionAt(text: string, position: number): Position {
   const before = text.slice(0, position).split("\n");
   return { line: before.length, column: (before.at(-1) ?? "").length + 1 };
 }

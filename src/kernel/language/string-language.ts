@@ -1,20 +1,19 @@
-/** What is said of a span of a text inside a string. Positions are UTF-16 units into that text. */
-export interface StringComplaint {
+/** An error in the text of a string. Positions are UTF-16 units into that text. */
+export interface StringDiagnostic {
   readonly start: number;
   readonly end: number;
   readonly text: string;
 }
 
-/** One offer to complete the word before the cursor. */
+/** A completion of the word before the cursor. */
 export interface StringCompletion {
   readonly text: string;
-  /** What it is, in one word: "function", "constant", "rule". */
+  /** Its kind, in one word: "function", "parameter", "rule". */
   readonly kind: string;
 }
 
 /**
- * Services for a language that is written inside a string of a cell. The kernel knows none itself; whoever
- * starts it registers them.
+ * Services for a language inside strings of cells. The kernel has none itself; its caller registers them.
  */
 export interface StringLanguage {
   /** Whether the string that is argument `argument` of a call of `callee` is in this language. */
@@ -23,11 +22,10 @@ export interface StringLanguage {
     text: string,
     position: number,
   ) => { start: number; end: number; items: readonly StringCompletion[] };
-  /** Markdown about what stands at the position. */
+  /** Markdown about the word at the position. */
   readonly inspect: (text: string, position: number) => string | undefined;
   /**
-   * What is wrong with the text. `others` are the arguments of the call after it, as far as they are written out:
-   * what is not a literal is undefined.
+   * Errors in the text. `others` are the arguments after it; an argument that is not a literal is undefined.
    */
-  readonly check: (text: string, others: readonly unknown[]) => readonly StringComplaint[];
+  readonly check: (text: string, others: readonly unknown[]) => readonly StringDiagnostic[];
 }

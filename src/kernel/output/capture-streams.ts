@@ -1,6 +1,6 @@
-import { presentRun } from "./run.js";
+import { currentRun } from "./run.js";
 
-/** Sends what cells write to the standard streams, `console` included, to the cell that wrote it. */
+/** Redirects what cells write to the standard streams, including `console`, to the output of the cell. */
 export function captureStreams(): void {
   capture("stdout");
   capture("stderr");
@@ -10,8 +10,8 @@ function capture(name: "stdout" | "stderr"): void {
   const stream = process[name];
   const original = stream.write.bind(stream);
   const write = (chunk: string | Uint8Array, ...rest: unknown[]): boolean => {
-    const run = presentRun();
-    // Outside any cell the terminal that started the kernel is the place.
+    const run = currentRun();
+    // Outside any cell, write to the terminal that started the kernel.
     if (run === undefined) return original(chunk);
     if (!run.silent)
       run.output.print(name, typeof chunk === "string" ? chunk : Buffer.from(chunk).toString());

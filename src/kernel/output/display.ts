@@ -1,16 +1,16 @@
 import { randomUUID } from "node:crypto";
 import type { MimeBundle } from "../mime-bundle.js";
-import { presentRun } from "./run.js";
+import { currentRun } from "./run.js";
 import { withText } from "./value-bundle.js";
 
 export interface DisplayOptions {
-  /** Names the display, so that it can be replaced later, from this cell or another. */
+  /** Identifies the display, so that it can be replaced later from any cell. */
   readonly display_id?: string;
-  /** Replace the displays of that name instead of adding one. */
+  /** Replace the displays with this id instead of adding one. */
   readonly update?: boolean;
 }
 
-/** What `display` returns: a handle on what was shown. */
+/** Returned by `display`: a handle on the display. */
 export interface DisplayHandle {
   readonly display_id: string;
   readonly update: (bundle: MimeBundle | Promise<MimeBundle>) => void;
@@ -34,26 +34,26 @@ export function display(
 
 const handles = new WeakSet<object>();
 
-/** Whether a value is what `display` returned: its display has been shown, it is not shown again as a value. */
+/** Whether a value was returned by `display`; such a value is not shown again. */
 export function isDisplayHandle(value: unknown): boolean {
   return typeof value === "object" && value !== null && handles.has(value);
 }
 
 function send(bundle: MimeBundle | Promise<MimeBundle>, id: string, named: boolean, update: boolean): void {
-  const run = presentRun();
+  const run = currentRun();
   if (run === undefined || run.silent) return;
   const content = (data: MimeBundle): object => ({
     data: withText(data),
     metadata: {},
-    // An unnamed display carries its id too, or its handle could not replace it.
+    // An unnamed display also carries its id, so that its handle can replace it.
     transient: named || !update ? { display_id: id } : {},
   });
   const type = update ? "update_display_data" : "display_data";
   run.output.add(type, bundle instanceof Promise ? bundle.then(content) : content(bundle));
 }
 
-/** Clears the cell's outputs; with `wait`, not before the next one comes. */
+/** Clears the outputs of the cell; with `wait`, only when the next one comes. */
 export function clearOutput(wait = false): void {
-  const run = presentRun();
+  const run = currentRun();
   if (run && !run.silent) run.output.add("clear_output", { wait });
 }

@@ -2,8 +2,8 @@
 export type Publish = (type: string, content: object) => void;
 
 /**
- * The outputs of one cell in the order in which the cell made them. An output may still be in the making (a
- * picture being drawn, say); those after it wait for it.
+ * The outputs of one cell in the order of their creation. An output may still be pending, such as a picture being
+ * drawn; later outputs wait for it.
  */
 export interface OutputQueue {
   readonly add: (type: string, content: object | Promise<object>) => void;
@@ -12,8 +12,8 @@ export interface OutputQueue {
   readonly drained: () => Promise<void>;
 }
 
-const longestHeld = 8_192;
-const longestHeldMs = 25;
+const maxHeldCharacters = 8_192;
+const maxHeldMs = 25;
 
 export function outputQueue(publish: Publish, failed: (cause: unknown) => object): OutputQueue {
   let last: Promise<void> | undefined;
@@ -45,8 +45,8 @@ export function outputQueue(publish: Publish, failed: (cause: unknown) => object
       flush();
       enqueue(type, content);
     },
-    // Text is held for a moment and sent in pieces: a message a line would drown the front end. The clock is
-    // looked at with each write, since a busy loop never lets a timer run.
+    // Text is buffered briefly and sent in chunks, because a message per line would overload the front end. The clock
+    // is checked at each write, since a busy loop never lets a timer run.
     print: (name, text) => {
       if (held !== undefined && held.name !== name) flush();
       if (held === undefined) {
@@ -55,7 +55,7 @@ export function outputQueue(publish: Publish, failed: (cause: unknown) => object
         return;
       }
       held.text += text;
-      if (held.text.length > longestHeld || performance.now() - held.since > longestHeldMs) flush();
+      if (held.text.length > maxHeldCharacters || performance.now() - held.since > maxHeldMs) flush();
     },
     drained: async () => {
       flush();

@@ -1,7 +1,7 @@
 import { inspect } from "node:util";
-import { type MimeBundle, showsItself } from "../mime-bundle.js";
+import { type MimeBundle, mimeBundleMethod } from "../mime-bundle.js";
 
-/** The representations of a value: its own where it shows itself, else the text that Node would print. */
+/** The representations of a value: its own if it displays itself, otherwise the text that Node would print. */
 export function valueBundle(value: unknown): MimeBundle | Promise<MimeBundle> {
   const shown = ownBundle(value);
   if (shown === undefined) return { "text/plain": textOf(value) };
@@ -9,7 +9,7 @@ export function valueBundle(value: unknown): MimeBundle | Promise<MimeBundle> {
   return withText(shown, value);
 }
 
-/** Adds the text form that every bundle must have, from its other forms where it has none. */
+/** Adds the text form that every bundle must have, derived from its other forms. */
 export function withText(bundle: MimeBundle, value?: unknown): MimeBundle {
   if (typeof bundle["text/plain"] === "string") return bundle;
   const text = bundle["text/markdown"] ?? bundle["text/latex"];
@@ -22,10 +22,10 @@ export function withText(bundle: MimeBundle, value?: unknown): MimeBundle {
 
 function ownBundle(value: unknown): MimeBundle | Promise<MimeBundle> | undefined {
   if ((typeof value !== "object" && typeof value !== "function") || value === null) return undefined;
-  const method: unknown = Reflect.get(value, showsItself);
+  const method: unknown = Reflect.get(value, mimeBundleMethod);
   if (typeof method !== "function") return undefined;
   const shown: unknown = method.call(value);
-  // A bundle is an object by contract; anything else is treated as "does not show itself".
+  // A bundle is an object by contract; anything else means that the value does not display itself.
   return typeof shown === "object" && shown !== null
     ? (shown as MimeBundle | Promise<MimeBundle>)
     : undefined;

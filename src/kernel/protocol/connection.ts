@@ -1,5 +1,5 @@
 import { readFileSync } from "node:fs";
-import { incompleteConnectionFile, unreadableConnectionFile } from "../refusals.js";
+import { incompleteConnectionFileError, unreadableConnectionFileError } from "../errors.js";
 
 /**
  * Where a kernel listens and how its messages are signed.
@@ -25,17 +25,17 @@ export function readConnection(path: string): Connection {
   try {
     given = JSON.parse(readFileSync(path, "utf8")) as Record<string, unknown>;
   } catch (cause) {
-    throw unreadableConnectionFile(path, cause);
+    throw unreadableConnectionFileError(path, cause);
   }
   for (const port of ports) {
-    if (!Number.isInteger(given[port])) throw incompleteConnectionFile(path, port);
+    if (!Number.isInteger(given[port])) throw incompleteConnectionFileError(path, port);
   }
-  if (typeof given["ip"] !== "string") throw incompleteConnectionFile(path, "ip");
+  if (typeof given["ip"] !== "string") throw incompleteConnectionFileError(path, "ip");
   // The checks above cover every field that has no default here.
   return { transport: "tcp", key: "", signature_scheme: "hmac-sha256", ...given } as Connection;
 }
 
-/** The address of one of the five channels, as the sockets want it. */
+/** The address of one of the five channels, as the sockets expect it. */
 export function address(connection: Connection, port: (typeof ports)[number]): string {
   const separator = connection.transport === "ipc" ? "-" : ":";
   return `${connection.transport}://${connection.ip}${separator}${connection[port]}`;

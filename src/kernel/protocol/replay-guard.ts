@@ -1,8 +1,8 @@
-const remembered = 65_536;
+const capacity = 65_536;
 
 /**
- * Remembers the signatures it has seen, so that a recorded message cannot be sent again.
- * Unsigned messages (empty) are never refused. The older half is forgotten when the memory is full.
+ * Rejects signatures that were seen before, so that a recorded message cannot be replayed. Unsigned messages (empty)
+ * always pass. The older half is dropped when the capacity is reached.
  */
 export function replayGuard(): (signature: string) => boolean {
   let recent = new Set<string>();
@@ -10,7 +10,7 @@ export function replayGuard(): (signature: string) => boolean {
   return (signature) => {
     if (signature === "") return true;
     if (recent.has(signature) || older.has(signature)) return false;
-    if (recent.size >= remembered / 2) {
+    if (recent.size >= capacity / 2) {
       older = recent;
       recent = new Set();
     }

@@ -2,10 +2,10 @@ interface Sends {
   send(frames: Uint8Array[]): Promise<void>;
 }
 
-/** A socket takes one send at a time: this keeps the order and waits for each before the next. */
+/** A socket accepts one send at a time: this queues them in order. */
 export interface SerialSender {
   readonly send: (frames: Uint8Array[]) => void;
-  /** Resolves when everything given so far has been handed to the socket. */
+  /** Resolves when everything queued so far has been handed to the socket. */
   readonly drained: () => Promise<void>;
 }
 
@@ -13,7 +13,7 @@ export function serialSender(socket: Sends): SerialSender {
   let last: Promise<void> = Promise.resolve();
   return {
     send: (frames) => {
-      // A receiver that has gone away must not stop what is sent to the others.
+      // A receiver that is gone must not block messages to the others.
       last = last.then(() => socket.send(frames)).catch(() => undefined);
     },
     drained: () => last,

@@ -1,8 +1,8 @@
 import { createHmac, timingSafeEqual } from "node:crypto";
-import { unknownSignatureScheme } from "../refusals.js";
+import { unknownSignatureSchemeError } from "../errors.js";
 
 /**
- * Signs the four dictionaries of a message and recognises its own signatures.
+ * Signs the four dictionaries of a message and verifies signatures.
  * @see Jupyter messaging, "The wire protocol": HMAC over the raw bytes; an empty key means no signature.
  */
 export interface Signature {
@@ -22,7 +22,7 @@ export function signatureOf(key: string, scheme: string): Signature {
   try {
     sign([]);
   } catch {
-    throw unknownSignatureScheme(scheme);
+    throw unknownSignatureSchemeError(scheme);
   }
   return {
     sign,

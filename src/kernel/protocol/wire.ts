@@ -5,7 +5,7 @@ import type { Signature } from "./signature.js";
 const delimiter = Buffer.from("<IDS|MSG>");
 const dictionaryCount = 4;
 
-/** A message whose four dictionaries are text already, so that it can be handed to another thread cheaply. */
+/** A message with its four dictionaries serialised, so that it can be passed to another thread cheaply. */
 export interface Envelope {
   readonly identities: readonly Uint8Array[];
   readonly dictionaries: readonly string[];
@@ -25,7 +25,7 @@ export function framesOf(sealed: Envelope, signature: Signature): Uint8Array[] {
   return [...sealed.identities, delimiter, signed, ...dictionaries, ...sealed.buffers];
 }
 
-/** Reads frames; `undefined` for anything malformed, wrongly signed or seen before, which is then dropped. */
+/** Reads frames; `undefined` for anything malformed, wrongly signed or replayed, which is dropped. */
 export type Decoder = (frames: readonly Uint8Array[]) => Message | undefined;
 
 export function decoder(signature: Signature): Decoder {
@@ -43,7 +43,7 @@ export function decoder(signature: Signature): Decoder {
     return {
       identities: frames.slice(0, start),
       header,
-      // A parent is a header of ours or empty; nothing here reads more of it than its id.
+      // A parent is a header of ours or empty; only its id is read here.
       parent: parent as Message["parent"],
       metadata,
       content,
@@ -59,7 +59,7 @@ function readDictionaries(frames: readonly Uint8Array[]): FourDictionaries | und
   try {
     const read = frames.map((frame) => JSON.parse(Buffer.from(frame).toString("utf8")) as unknown);
     const plain = read.every((value) => typeof value === "object" && value !== null && !Array.isArray(value));
-    // There are exactly four frames: the caller counted them.
+    // The caller checked that there are exactly four frames.
     return plain ? (read as FourDictionaries) : undefined;
   } catch {
     return undefined;

@@ -2,8 +2,8 @@ import type { Message } from "../protocol/message.js";
 import type { KernelState } from "./kernel-state.js";
 
 /**
- * Nothing in this kernel offers a comm target, so none is ever open: an opened one is closed at once, and
- * messages to unknown ones are ignored, as the protocol wants it.
+ * This kernel has no comm targets: a comm that is opened is closed at once, and messages to unknown ones are ignored,
+ * as the protocol requires.
  * @see Jupyter messaging, "Custom Messages".
  */
 export function commInfo(): object {

@@ -4,14 +4,14 @@ import { toCodePoints } from "./code-points.js";
 import { type Cursor, cursorOf } from "./cursor.js";
 import type { KernelState } from "./kernel-state.js";
 
-/** What may stand between `start` and `end` (UTF-16 units), each with its kind. */
+/** Completions for the text between `start` and `end` (UTF-16 units), each with its kind. */
 interface Offers {
   readonly start: number;
   readonly end: number;
   readonly items: readonly { readonly text: string; readonly kind: string }[];
 }
 
-/** @see Jupyter messaging, "Completion"; the kinds travel in the metadata field that front ends read them from. */
+/** @see Jupyter messaging, "Completion"; the kinds are in the metadata field where front ends read them. */
 export async function complete(kernel: KernelState, request: Message): Promise<object> {
   const cursor = cursorOf(request);
   const { start, end, items } = (await offersInString(kernel, cursor)) ?? offersInCode(kernel, cursor);

@@ -1,7 +1,7 @@
 import type { Message } from "../protocol/message.js";
 import { toUnits } from "./code-points.js";
 
-/** A text with a place in it. */
+/** A text with a position in it. */
 export interface Cursor {
   readonly text: string;
   /** In UTF-16 units. */

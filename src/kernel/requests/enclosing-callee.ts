@@ -1,6 +1,6 @@
 import type ts from "typescript-cell";
 
-/** Where the name of the function stands whose brackets are open at the position: `fit(rule, |` -> within `fit`. */
+/** Position of the name of the function whose brackets are open at the cursor: `fit(rule, |` -> within `fit`. */
 export function enclosingCallee(library: typeof ts, text: string, position: number): number | undefined {
   const file = library.createSourceFile("cell.ts", text, library.ScriptTarget.ES2022);
   let callee: number | undefined;
@@ -14,7 +14,7 @@ export function enclosingCallee(library: typeof ts, text: string, position: numb
   return callee;
 }
 
-/** The brackets of a call that is still being typed are open to the end of the text. */
+/** The brackets of a call that is still being typed extend to the end of the text. */
 function isInBrackets({ expression, end }: ts.CallExpression, text: string, position: number): boolean {
   return position > expression.end && (position < end || text[end - 1] !== ")");
 }

@@ -10,14 +10,14 @@ import type { Message } from "../protocol/message.js";
 import type { HistoryEntry, KernelState } from "./kernel-state.js";
 import { evaluateExpressions } from "./user-expressions.js";
 
-/** One execution: the request, read, and what belongs to it. */
+/** One execution: the parsed request and its run. */
 interface Execution {
   readonly code: string;
   readonly expressions: Readonly<Record<string, unknown>>;
   readonly run: Run;
   readonly count: number;
   readonly label: string;
-  /** Its row in the history, when it has one. */
+  /** Its entry in the history, if it is stored. */
   readonly entry: HistoryEntry | undefined;
 }
 
@@ -29,15 +29,15 @@ const hasString = /["'`]/;
  * @see Jupyter messaging, "Execute".
  */
 export async function execute(kernel: KernelState, request: Message): Promise<object> {
-  const execution = begun(kernel, request);
+  const execution = startExecution(kernel, request);
   const { run, code, count } = execution;
   if (!run.silent) kernel.publish(request.header, "execute_input", { code, execution_count: count });
-  const reply = await runAs(run, () => answered(kernel, execution));
+  const reply = await runAs(run, () => executeReply(kernel, execution));
   await run.output.drained();
   return { ...reply, execution_count: count };
 }
 
-function begun(kernel: KernelState, request: Message): Execution {
+function startExecution(kernel: KernelState, request: Message): Execution {
   const { content } = request;
   const silent = content["silent"] === true;
   const stored = !silent && content["store_history"] !== false;
@@ -62,17 +62,17 @@ function begun(kernel: KernelState, request: Message): Execution {
 function newRun(kernel: KernelState, request: Message, silent: boolean): Run {
   const output = outputQueue(
     (type, content) => kernel.publish(request.header, type, content),
-    (cause) => ({ name: "stderr", text: `An output could not be shown: ${String(cause)}\n` }),
+    (cause) => ({ name: "stderr", text: `An output could not be displayed: ${String(cause)}\n` }),
   );
   const allowsInput = request.content["allow_stdin"] === true;
   return { serial: kernel.serial, request, output, silent, allowsInput, stopped: false };
 }
 
-async function answered(kernel: KernelState, execution: Execution): Promise<object> {
+async function executeReply(kernel: KernelState, execution: Execution): Promise<object> {
   const { run, code, label, expressions } = execution;
   kernel.interrupts.begin(run, () => kernel.session().stop());
   try {
-    const outcome = await outcomeOf(kernel, execution);
+    const outcome = await runCell(kernel, execution);
     await run.output.drained();
     if (outcome.kind !== "failed") {
       return { status: "ok", payload: [], user_expressions: await evaluateExpressions(kernel, expressions) };
@@ -86,8 +86,8 @@ async function answered(kernel: KernelState, execution: Execution): Promise<obje
   }
 }
 
-/** Checks, runs and shows. Whatever fails on the way, showing the value included, fails the cell. */
-async function outcomeOf(kernel: KernelState, execution: Execution): Promise<CellOutcome> {
+/** Checks and runs the cell and shows its value. An error in any of these fails the cell. */
+async function runCell(kernel: KernelState, execution: Execution): Promise<CellOutcome> {
   const { code, run, label } = execution;
   try {
     const session = kernel.session();

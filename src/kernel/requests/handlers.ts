@@ -6,10 +6,10 @@ import { inspect } from "./inspect.js";
 import { isComplete } from "./is-complete.js";
 import type { KernelState } from "./kernel-state.js";
 
-/** Answers a request: the content of the reply, or nothing for messages that get none. */
+/** Handles a request; returns the content of the reply, or nothing for messages without one. */
 export type Handler = (kernel: KernelState, request: Message) => object | undefined | Promise<object>;
 
-/** Requests other than those that the transport thread answers itself and `execute_request`, which queues. */
+/** Handlers of all requests except those answered by the transport thread and `execute_request`, which is queued. */
 export const handlers: Readonly<Record<string, Handler>> = {
   complete_request: complete,
   inspect_request: inspect,

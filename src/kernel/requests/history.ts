@@ -1,7 +1,7 @@
 import type { Message } from "../protocol/message.js";
 import type { HistoryEntry, KernelState } from "./kernel-state.js";
 
-/** Rows tell which session they are of; a kernel remembers only its own. */
+/** Rows carry a session number; the kernel stores only its own session. */
 const session = 1;
 const presentSessions: readonly unknown[] = [undefined, null, 0, session];
 
@@ -43,7 +43,7 @@ function lastOfEachText(entries: readonly HistoryEntry[]): readonly HistoryEntry
   return entries.filter(({ text }, index) => !entries.slice(index + 1).some((later) => later.text === text));
 }
 
-/** A shell-like pattern: `*` for any text, `?` for one character. */
+/** A glob pattern: `*` for any text, `?` for one character. */
 function globPattern(glob: string): RegExp {
   const source = glob
     .replace(/[.+^${}()|[\]\\]/g, "\\$&")

@@ -1,48 +1,48 @@
 import { Interrupted } from "../cells/cell-error.js";
-import { presentRun } from "../output/run.js";
+import { inputNotAllowedError } from "../errors.js";
+import { currentRun } from "../output/run.js";
 import type { Message } from "../protocol/message.js";
-import { inputNotAllowed } from "../refusals.js";
 
-/** Questions to the person at the front end, asked one after the other. */
+/** Input prompts to the user of the front end, one after the other. */
 export interface InputQuestions {
   readonly ask: (prompt?: string, options?: { readonly password?: boolean }) => Promise<string>;
   readonly answer: (message: Message) => void;
-  /** Gives up what is still unanswered: its cell has ended, and nobody will answer. */
+  /** Rejects the pending prompt: its cell has ended, and no answer will come. */
   readonly abandon: () => void;
 }
 
-interface Waiting {
+interface PendingQuestion {
   readonly answered: (text: string) => void;
   readonly abandoned: (cause: Error) => void;
 }
 
 /** @see Jupyter messaging, "Messages on the stdin (ROUTER/DEALER) channel". */
 export function inputQuestions(send: (request: Message, content: object) => void): InputQuestions {
-  let waiting: Waiting | undefined;
+  let pending: PendingQuestion | undefined;
   let turn: Promise<unknown> = Promise.resolve();
   return {
     ask: (prompt = "", options = {}) => {
-      const run = presentRun();
-      if (run === undefined || !run.allowsInput) return Promise.reject(inputNotAllowed());
+      const run = currentRun();
+      if (run === undefined || !run.allowsInput) return Promise.reject(inputNotAllowedError());
       const asked = turn.then(async () => {
         await run.output.drained();
         send(run.request, { prompt: String(prompt), password: options.password === true });
         return new Promise<string>((answered, abandoned) => {
-          waiting = { answered, abandoned };
+          pending = { answered, abandoned };
         });
       });
-      // The next question does not mind how this one ended.
+      // The next prompt does not depend on how this one ended.
       turn = asked.catch(() => undefined);
       return asked;
     },
     answer: ({ content }) => {
-      const given = waiting;
-      waiting = undefined;
+      const given = pending;
+      pending = undefined;
       given?.answered(String(content["value"] ?? ""));
     },
     abandon: () => {
-      waiting?.abandoned(new Interrupted());
-      waiting = undefined;
+      pending?.abandoned(new Interrupted());
+      pending = undefined;
     },
   };
 }

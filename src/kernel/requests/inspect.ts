@@ -33,21 +33,21 @@ function aboutCode(kernel: KernelState, { text, position }: Cursor, deep: boolea
 
 const plainTags = ["param", "returns"];
 
-/** Type, docstring and tags; errors, sources and examples only when asked for more. */
+/** Type, docstring and tags; errors, sources and examples only at detail level 1. */
 function markdownOf({ displayParts, documentation, tags }: ts.QuickInfo, deep: boolean): string {
-  const told = (tags ?? []).filter(({ name }) => deep || plainTags.includes(name));
+  const shown = (tags ?? []).filter(({ name }) => deep || plainTags.includes(name));
   const parts = [
     `\`\`\`typescript\n${joined(displayParts)}\n\`\`\``,
     joined(documentation),
-    ...told.map(tagMarkdown),
+    ...shown.map(tagMarkdown),
   ];
   return parts.filter((part) => part !== "").join("\n\n");
 }
 
 function tagMarkdown({ name, text }: ts.JSDocTagInfo): string {
-  const told = joined(text);
-  if (name === "example") return `*example*\n\`\`\`typescript\n${told}\n\`\`\``;
-  return `*${name}* ${told}`;
+  const shown = joined(text);
+  if (name === "example") return `*example*\n\`\`\`typescript\n${shown}\n\`\`\``;
+  return `*${name}* ${shown}`;
 }
 
 function joined(parts: readonly ts.SymbolDisplayPart[] | undefined): string {

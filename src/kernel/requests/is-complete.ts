@@ -12,17 +12,17 @@ export function isComplete(kernel: KernelState, request: Message): object {
   return completeness(kernel.session().compiler.library, text);
 }
 
-/** A text whose first mistake is that it ends is incomplete; one with a mistake before that is invalid. */
+/** A text whose first error is at its end is incomplete; one with an earlier error is invalid. */
 function completeness(library: typeof ts, text: string): object {
   const file = library.createSourceFile("cell.ts", modulePrefix + text, library.ScriptTarget.ES2022);
-  // Every parsed file has this list; the compiler's declarations leave it out.
+  // Every parsed file has this list; the compiler's declarations omit it.
   const [first] = Reflect.get(file, "parseDiagnostics") as readonly ts.DiagnosticWithLocation[];
   if (first === undefined) return { status: "complete" };
   const end = modulePrefix.length + text.trimEnd().length;
   return first.start >= end ? { status: "incomplete", indent: indentAfter(text) } : { status: "invalid" };
 }
 
-/** The next line stands as far in as the last one, and further when that one opens a bracket. */
+/** The indentation of the last line, increased when it opens a bracket. */
 function indentAfter(text: string): string {
   const last = text.trimEnd().split("\n").at(-1) ?? "";
   const own = /^\s*/.exec(last)?.[0] ?? "";

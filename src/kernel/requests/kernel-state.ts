@@ -1,17 +1,17 @@
 import type { CellSession } from "../cells/cell-session.js";
 import type { Interrupts } from "../cells/interrupts.js";
-import type { SourceRegister } from "../cells/source-register.js";
+import type { SourceRegistry } from "../cells/source-registry.js";
 import type { StringLanguage } from "../language/string-language.js";
 import type { Message } from "../protocol/message.js";
 import type { InputQuestions } from "./input-questions.js";
 
-/** What the handlers of requests work with. */
+/** State shared by the request handlers. */
 export interface KernelState {
-  /** Built on first use, which is usually the idle time after the start. */
+  /** Built on first use, usually in the idle time after the start. */
   readonly session: () => CellSession;
-  readonly sources: SourceRegister;
+  readonly sources: SourceRegistry;
   readonly interrupts: Interrupts;
-  /** The services for languages inside strings, loaded once, when first asked for. */
+  /** The services for languages inside strings, loaded on first use. */
   readonly languages: () => Promise<readonly StringLanguage[]>;
   readonly questions: InputQuestions;
   readonly history: HistoryEntry[];

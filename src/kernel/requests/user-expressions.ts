@@ -17,7 +17,7 @@ export async function evaluateExpressions(
 
 async function evaluate(kernel: KernelState, expression: string): Promise<object> {
   kernel.serial += 1;
-  const label = "an expression asked for";
+  const label = "a user expression";
   const outcome = await kernel.session().run(expression, cellName(kernel.serial), label);
   if (outcome.kind === "failed") {
     return { status: "error", ...errorReport(outcome.cause, expression, label, kernel.sources) };

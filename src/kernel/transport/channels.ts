@@ -3,13 +3,13 @@ import { address, type Connection } from "../protocol/connection.js";
 import { type SerialSender, serialSender } from "../protocol/serial-sender.js";
 import { signatureOf } from "../protocol/signature.js";
 import { type Decoder, decoder, type Envelope, framesOf } from "../protocol/wire.js";
-import type { Outlet } from "./port-messages.js";
+import type { OutgoingChannel } from "./port-messages.js";
 
 type Incoming = "shell" | "control" | "stdin";
 
 /** The five bound sockets of a kernel. */
 export interface Channels {
-  readonly send: (outlet: Outlet, sealed: Envelope) => void;
+  readonly send: (outlet: OutgoingChannel, sealed: Envelope) => void;
   readonly listen: (
     channel: Incoming,
     receive: (message: NonNullable<ReturnType<Decoder>>) => void,
@@ -27,7 +27,7 @@ export async function bindChannels(connection: Connection): Promise<Channels> {
   const decode = decoder(signature);
   const sockets = { shell: new Router(), control: new Router(), stdin: new Router(), iopub: new Publisher() };
   const heartbeat = new Reply();
-  // A slow reader must not lose outputs: nothing is dropped, memory is the limit.
+  // A slow reader must not lose outputs: nothing is dropped, and memory is the only limit.
   sockets.iopub.sendHighWaterMark = 0;
   for (const socket of [...Object.values(sockets), heartbeat]) socket.linger = lingerMs;
   await Promise.all([
@@ -37,7 +37,7 @@ export async function bindChannels(connection: Connection): Promise<Channels> {
     sockets.iopub.bind(address(connection, "iopub_port")),
     heartbeat.bind(address(connection, "hb_port")),
   ]);
-  const senders: Record<Outlet, SerialSender> = {
+  const senders: Record<OutgoingChannel, SerialSender> = {
     shell: serialSender(sockets.shell),
     control: serialSender(sockets.control),
     stdin: serialSender(sockets.stdin),

@@ -10,9 +10,9 @@ export interface Transport {
 
 export function startTransport(data: TransportData): Transport {
   const worker = new Worker(join(__dirname, "transport-worker.js"), { workerData: data });
-  // Without sockets a kernel is of no use to anybody, so its end is this process's end, with the reason shown.
+  // A kernel without sockets is useless, so the process ends with the reason.
   worker.on("error", (cause) => {
-    process.stderr.write(`The kernel cannot listen: ${cause.message}\n`);
+    process.stderr.write(`The kernel cannot listen on its ports: ${cause.message}\n`);
     process.exit(1);
   });
   return {

@@ -1,6 +1,7 @@
 import { type Band, bandBuilder } from "./band.js";
 import { type Growth, growthOf } from "./growth.js";
-import { type PassageLog, passageLog, type Watch } from "./passage.js";
+import { type PassageLog, passageLog } from "./passage.js";
+import type { PlacedWatch } from "./placed-watches.js";
 
 /** What is gathered of one state while an ensemble runs. */
 export interface GatheredState {
@@ -34,7 +35,7 @@ export interface GatherOptions {
   readonly periods: number;
   readonly keep: boolean;
   /** With the place of each watched state. */
-  readonly watches: readonly (Required<Watch> & { readonly place: number })[];
+  readonly watches: readonly PlacedWatch[];
 }
 
 export function gatherer(options: GatherOptions): Gatherer {
@@ -48,7 +49,7 @@ export function gatherer(options: GatherOptions): Gatherer {
     first: new Float64Array(paths),
     growth: undefined as Growth | undefined,
   }));
-  const logs = options.watches.map((watch): PassageLog => passageLog(paths, watch.value, watch.direction));
+  const logs = options.watches.map((watch): PassageLog => passageLog(paths, watch));
   const ended: number[] = [];
   return {
     passages: logs.map((log) => log.at),

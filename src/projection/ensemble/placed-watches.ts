@@ -1,9 +1,9 @@
 import type { Rule } from "../../rule/index.js";
 import { refuseWatch } from "../refusals.js";
-import type { Passage, Watch } from "./passage.js";
+import { type CrossedLevel, crossedLevel, type Passage, type Watch } from "./passage.js";
 
 /** A watch with its state's name and place. */
-export type PlacedWatch = Required<Watch> & { readonly place: number };
+export type PlacedWatch = CrossedLevel & { readonly state: string; readonly place: number };
 
 /** Finds the states that are watched. */
 export function placedWatches(rule: Rule, watches: readonly Watch[] = []): readonly PlacedWatch[] {
@@ -11,7 +11,7 @@ export function placedWatches(rule: Rule, watches: readonly Watch[] = []): reado
     const state = watch.state ?? rule.states[0]!;
     const place = rule.states.indexOf(state);
     if (place < 0) throw refuseWatch(state, rule.states);
-    return { state, value: watch.value, direction: watch.direction, place };
+    return { ...crossedLevel(watch), state, place };
   });
 }
 
@@ -20,5 +20,5 @@ export function passagesOf(
   watches: readonly PlacedWatch[],
   found: readonly Float64Array[],
 ): readonly Passage[] {
-  return watches.map(({ state, value, direction }, i) => ({ state, value, direction, at: found[i]! }));
+  return watches.map((watch, i) => ({ ...crossedLevel(watch), state: watch.state, at: found[i]! }));
 }

@@ -1,6 +1,4 @@
-import type { RandomStream } from "../../numeric/index.js";
-import { gammaDraw } from "./gamma-draw.js";
-import { poissonDraw } from "./poisson-draw.js";
+import { gammaDraw, poissonDraw, type RandomStream } from "../../numeric/index.js";
 
 /**
  * How a value scatters around what the rule gives, by distribution. `normal`: of the given standard deviation, in the

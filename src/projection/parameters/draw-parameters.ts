@@ -1,5 +1,4 @@
-import { choleskyFactor, type RandomStream } from "../../numeric/index.js";
-import { gammaDraw } from "../noise/gamma-draw.js";
+import { choleskyFactor, gammaDraw, type RandomStream } from "../../numeric/index.js";
 
 /**
  * Draws unknowns of a fit around their estimates; writes into `out`, and gives the drawn sigma as a multiple of the
@@ -16,26 +15,29 @@ export function drawnSpread(degreesOfFreedom: number, stream: RandomStream): num
 /**
  * A multivariate t around the estimates: normal by the covariance, widened by the uncertainty of sigma^2.
  *
- * @param covariance - [size, size] row-major, by sigma^2 = RSS/(n - p).
+ * @param drawn - which unknowns are drawn; the others stay at their estimates.
+ * @param covariance - of those drawn, row-major, by sigma^2 = RSS/(n - p).
  * @returns undefined where the covariance is not positive definite.
  */
 export function parametersDraw(
   estimates: Float64Array,
+  drawn: readonly number[],
   covariance: Float64Array,
   degreesOfFreedom: number,
 ): ParametersDraw | undefined {
-  const size = estimates.length;
+  const size = drawn.length;
   const factor = choleskyFactor(covariance, size);
   if (factor === undefined) return undefined;
   const normals = new Float64Array(size);
   return (stream, out) => {
     for (let i = 0; i < size; i++) normals[i] = stream.normal();
     const widen = drawnSpread(degreesOfFreedom, stream);
-    for (let i = 0; i < size; i++) {
+    out.set(estimates);
+    drawn.forEach((unknown, i) => {
       let sum = 0;
       for (let k = 0; k <= i; k++) sum += factor[i * size + k]! * normals[k]!;
-      out[i] = estimates[i]! + widen * sum;
-    }
+      out[unknown] = estimates[unknown]! + widen * sum;
+    });
     return widen;
   };
 }

@@ -1,4 +1,4 @@
-import type { Fit, GroupFit } from "../../estimate/index.js";
+import { type Fit, type GroupFit, problemOf } from "../../estimate/index.js";
 import { choleskyFactor, type RandomStream } from "../../numeric/index.js";
 import { blockSize } from "../ensemble/block-streams.js";
 import type { Starts } from "../ensemble/ensemble.js";
@@ -31,17 +31,26 @@ export interface UnknownsDraw {
 /** Draws thrown away for each one kept, at most. */
 const patience = 200;
 
-/** The draw that a group's record allows. */
+/**
+ * The draw that a group's record allows. Standard deviations and dispersions stay at their estimates: what the record
+ * leaves open of the two errors of a state space it does not leave open of their sum, which is what a band rests on.
+ */
 export function unknownsDraw(fit: Fit, group: GroupFit): UnknownsDraw {
-  const together = fit.options.groups !== undefined && fit.options.groups !== "separate";
+  const together = problemOf(fit).groups !== "separate";
   const loose = together ? undefined : loosest(group);
   if (loose !== undefined) {
     const draw = drawAlongProfile(fit, group, loose);
     if (draw === undefined) throw refuseUndetermined(group.group, openNames(group));
     return { draw, method: "along the profile", followed: loose.name };
   }
-  const estimates = Float64Array.from(group.estimates, (estimate) => estimate.value);
-  const draw = parametersDraw(estimates, Float64Array.from(group.covariance), group.degreesOfFreedom);
+  const drawn = group.estimates.flatMap(({ role }, i) => (role === "scale" ? [] : [i]));
+  const size = group.estimates.length;
+  const draw = parametersDraw(
+    Float64Array.from(group.estimates, (estimate) => estimate.value),
+    drawn,
+    Float64Array.from(drawn.flatMap((i) => drawn.map((j) => group.covariance[i * size + j]!))),
+    group.degreesOfFreedom,
+  );
   if (draw === undefined) throw refuseUndetermined(group.group, openNames(group));
   return { draw, method: "around the estimates", followed: undefined };
 }
@@ -78,14 +87,8 @@ export function drawnStarts(
     });
   }
   const { method, followed } = source;
-  const sigma = hasSigma(fit) ? spread : undefined;
+  const sigma = problemOf(fit).group(ground.group.group).findsSigma ? spread : undefined;
   return { paths, size, parameters, initial, method, followed, spread: sigma, discarded };
-}
-
-/** Whether a fit's scatter is the sigma of its residuals, and not a likelihood's own spread or a given one. */
-function hasSigma({ options }: Fit): boolean {
-  const { distribution: spread = "normal", errors } = options;
-  return errors !== "both" && (spread === "normal" || spread === "lognormal");
 }
 
 /** The first state vector of a path: known, or drawn from what a filter believes of it. */
@@ -99,15 +102,15 @@ function beginning({ belief, initial }: FitGround): (stream: RandomStream) => Fl
     return Float64Array.from(belief.mean, (mean, i) => {
       let value = mean;
       for (let k = 0; k <= i; k++) value += factor[i * size + k]! * normals[k]!;
-      return belief.log ? Math.exp(value) : value;
+      return belief.scale.from(value);
     });
   };
 }
 
 function boundsOf(fit: Fit, group: GroupFit): (unknowns: Float64Array) => boolean {
-  const limits = group.estimates.map(({ name }) => fit.options.bounds?.[name] ?? fit.rule.bounds[name]);
-  return (unknowns) =>
-    limits.every((limit, i) => limit === undefined || (unknowns[i]! >= limit[0] && unknowns[i]! <= limit[1]));
+  const { bounds } = problemOf(fit);
+  const limits = group.estimates.map(({ name }) => bounds(name));
+  return (unknowns) => limits.every(([low, high], i) => unknowns[i]! >= low && unknowns[i]! <= high);
 }
 
 function openNames(group: GroupFit): readonly string[] {

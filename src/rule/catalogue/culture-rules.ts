@@ -1,78 +1,92 @@
 import type { Rule } from "../rule.js";
-import { type NamedRuleOptions, named } from "./named.js";
+import { catalogueRule, type NamedRuleOptions } from "./catalogue-rule.js";
 import type { CatalogueEntry } from "./named-rule.js";
-import { aboveOne, capacity, fraction, growth, level, other, positive, pure } from "./quantities.js";
+import {
+  aboveOne,
+  carryingCapacity,
+  dimensionless,
+  fraction,
+  growthFactor,
+  level,
+  positive,
+  quantityWithUnit,
+} from "./quantities.js";
 
-const speed = other("largest growth rate", "1/hour");
-const stepLength = other("length of a period", "hour");
+const speed = quantityWithUnit("maximum specific growth rate", "1/hour");
+const stepLength = quantityWithUnit("length of one period", "hour");
 
 const threePhase: CatalogueEntry = {
   name: "threePhase",
-  title: "Three-phase growth of the logarithm: lag, growth, level",
+  title: "Three-phase linear growth of the logarithm: lag, exponential growth, stationary phase",
   text: "x[t+1] = min(xmax, x + mu*max(0, min(h, (t + 1)*h - lag)))",
   source: "Buchanan, Whiting and Damert (1997), When is simple good enough, Food Microbiology 14, 313-326",
   quantities: {
-    x: pure("natural logarithm of the level"),
-    xmax: pure("logarithm of the highest level"),
+    x: dimensionless("natural logarithm of the density"),
+    xmax: dimensionless("logarithm of the maximum density"),
     mu: speed,
     h: stepLength,
-    lag: other("time before growth begins", "hour"),
+    lag: quantityWithUnit("lag: time before growth starts", "hour"),
   },
-  holds: ["mu > 0", "h > 0", "lag >= 0", "x0 <= xmax"],
+  validWhen: ["mu > 0", "h > 0", "lag >= 0", "x0 <= xmax"],
   bounds: { mu: positive, h: positive, lag: positive },
   equilibria: [],
   closedForms: [{ values: { x: "min(xmax, x0 + mu*max(0, t*h - lag))" } }],
-  remarks: "Sharp corners, robust with few points. It rests at xmax.",
+  remarks: "Piecewise linear, and robust with few readings. It stays at xmax once it is reached.",
 };
 
 const baranyi: CatalogueEntry = {
   name: "baranyi",
-  title: "Baranyi-Roberts growth with lag, in steps",
+  title: "Baranyi-Roberts growth with lag, in discrete time",
   text: "ready = q*exp(mu*h)\nq[t+1] = ready\nN[t+1] = N*exp(log((1 + ready)/(1 + q))*(1 - N/K))",
   source:
-    "Baranyi and Roberts (1994), A dynamic approach to predicting bacterial growth, Int. J. Food Microbiol. 23, 277-294, stepped",
+    "Baranyi and Roberts (1994), A dynamic approach to predicting bacterial growth, Int. J. Food Microbiol. 23, 277-294, in discrete time",
   quantities: {
     N: level,
-    q: pure("physiological readiness; lag = log(1 + 1/q0)/mu"),
+    q: dimensionless("physiological state; lag = log(1 + 1/q0)/mu"),
     mu: speed,
     h: stepLength,
-    K: capacity,
+    K: carryingCapacity,
   },
-  holds: ["mu > 0", "h > 0", "K > 0", "q0 > 0", "N0 >= 0"],
+  validWhen: ["mu > 0", "h > 0", "K > 0", "q0 > 0", "N0 >= 0"],
   bounds: { mu: positive, h: positive, K: positive, q: positive, N: positive },
   equilibria: [],
   closedForms: [{ values: { q: "q0*exp(mu*h*t)" } }],
-  remarks: "q0 is not identified without readings inside the lag. N settles at K while q grows on.",
+  remarks: "q0 is not identifiable without readings during the lag. N levels off at K while q keeps growing.",
 };
 
 const resource: CatalogueEntry = {
   name: "resource",
-  title: "Resource-limited batch growth",
+  title: "Monod growth on a limiting resource (batch culture)",
   text: "grown = h*mu*S/(Ks + S)*N\nN[t+1] = N + grown\nS[t+1] = S - grown/Y",
-  source: "Monod (1949), The growth of bacterial cultures, Ann. Rev. Microbiol. 3, 371-394, stepped",
+  source: "Monod (1949), The growth of bacterial cultures, Ann. Rev. Microbiol. 3, 371-394, in discrete time",
   quantities: {
     N: level,
-    S: other("resource left", "mass"),
+    S: quantityWithUnit("resource remaining", "mass"),
     mu: speed,
     h: stepLength,
-    Ks: other("resource at half speed", "mass"),
-    Y: pure("yield, mass for mass"),
+    Ks: quantityWithUnit("half-saturation constant", "mass"),
+    Y: dimensionless("yield: mass formed per mass of resource used"),
   },
-  holds: ["mu > 0", "h > 0", "Ks > 0", "Y > 0", "N0 >= 0", "S0 >= 0", "h*mu*N0 <= Y*(Ks + S0)"],
+  validWhen: ["mu > 0", "h > 0", "Ks > 0", "Y > 0", "N0 >= 0", "S0 >= 0", "h*mu*N0 <= Y*(Ks + S0)"],
   bounds: { mu: positive, h: positive, Ks: positive, Y: positive, N: positive, S: positive },
   equilibria: [],
   closedForms: [],
   remarks:
-    "N + Y*S never changes. h must be short enough for S to stay above zero. mu and Ks are nearly confounded when S0 is far above Ks.",
+    "N + Y*S is conserved. Choose h short enough for S to stay positive. mu and Ks are nearly confounded when S0 is much larger than Ks.",
 };
 
 const chemostat: CatalogueEntry = {
   name: "chemostat",
-  title: "Continuous culture in steps: Beverton-Holt growth, then dilution",
+  title: "Chemostat in discrete time: Beverton-Holt growth, then dilution",
   text: "N[t+1] = (1 - d)*R*N/(1 + (R - 1)*N/K)",
   source: "common practice, no source",
-  quantities: { N: level, d: pure("share replaced in a period"), R: growth, K: capacity },
-  holds: ["R > 1", "K > 0", "d >= 0 and d < 1", "N0 >= 0"],
+  quantities: {
+    N: level,
+    d: dimensionless("fraction replaced per period"),
+    R: growthFactor,
+    K: carryingCapacity,
+  },
+  validWhen: ["R > 1", "K > 0", "d >= 0 and d < 1", "N0 >= 0"],
   bounds: { R: aboveOne, K: positive, d: fraction, N: positive },
   start: { R: 1.5, d: 0.1 },
   equilibria: [
@@ -86,21 +100,21 @@ const chemostat: CatalogueEntry = {
     },
     { when: "(1 - d)*R == 1", values: { N: "N0/(1 + (R - 1)/K*N0*t)" } },
   ],
-  remarks: "Washed out if and only if (1 - d)*R is at most 1; the critical share is 1 - 1/R.",
+  remarks: "Washout if and only if (1 - d)*R is at most 1; the critical fraction is 1 - 1/R.",
 };
 
 const transfer: CatalogueEntry = {
   name: "transfer",
-  title: "Serial transfer, level before each transfer",
+  title: "Serial transfer: density before each transfer",
   text: "N[t+1] = G*(N/D)/(1 + (G - 1)*(N/D)/K)",
   source: "common practice, no source",
   quantities: {
     N: level,
-    G: pure("multiplier between transfers at low level, R^(T/h)"),
-    D: pure("dilution factor of a transfer"),
-    K: capacity,
+    G: dimensionless("growth factor between transfers at low density, R^(T/h)"),
+    D: dimensionless("dilution factor per transfer"),
+    K: carryingCapacity,
   },
-  holds: ["G > 1", "D >= 1", "K > 0", "N0 >= 0"],
+  validWhen: ["G > 1", "D >= 1", "K > 0", "N0 >= 0"],
   bounds: { G: aboveOne, D: aboveOne, K: positive, N: positive },
   start: { G: 20, D: 10 },
   equilibria: [
@@ -113,16 +127,17 @@ const transfer: CatalogueEntry = {
       values: { N: "(G/D)^t*N0/(1 + (G - 1)/(D*K)*N0*((G/D)^t - 1)/(G/D - 1))" },
     },
   ],
-  remarks: "Washed out if and only if D is at least G. In the long run log2(D) generations a transfer.",
+  remarks:
+    "Washout if and only if D is at least G. In the long run there are log2(D) generations per transfer.",
 };
 
 /** x' = min(xmax, x + mu (time of the period after the lag)). */
-export const threePhaseRule = (options?: NamedRuleOptions): Rule => named(threePhase, options);
+export const threePhaseRule = (options?: NamedRuleOptions): Rule => catalogueRule(threePhase, options);
 /** q' = q e^(mu h), N' = N exp(log((1 + q')/(1 + q))(1 - N/K)). */
-export const baranyiRule = (options?: NamedRuleOptions): Rule => named(baranyi, options);
+export const baranyiRule = (options?: NamedRuleOptions): Rule => catalogueRule(baranyi, options);
 /** N' = N + h mu S/(Ks + S) N, S' = S - (N' - N)/Y. */
-export const resourceRule = (options?: NamedRuleOptions): Rule => named(resource, options);
+export const resourceRule = (options?: NamedRuleOptions): Rule => catalogueRule(resource, options);
 /** N' = (1 - d) R N/(1 + (R - 1) N/K). */
-export const chemostatRule = (options?: NamedRuleOptions): Rule => named(chemostat, options);
+export const chemostatRule = (options?: NamedRuleOptions): Rule => catalogueRule(chemostat, options);
 /** N' = F(N/D), F Beverton-Holt with multiplier G. */
-export const transferRule = (options?: NamedRuleOptions): Rule => named(transfer, options);
+export const transferRule = (options?: NamedRuleOptions): Rule => catalogueRule(transfer, options);

@@ -1,68 +1,68 @@
 import type { Rule } from "../rule.js";
-import { type DelayOption, past } from "./delay.js";
-import { type NamedRuleOptions, named } from "./named.js";
+import { catalogueRule, type NamedRuleOptions } from "./catalogue-rule.js";
+import { type LagOption, lagged, periodCount } from "./lag.js";
 import type { CatalogueEntry } from "./named-rule.js";
 import {
-  capacity,
+  carryingCapacity,
+  dimensionless,
   fraction,
-  growth,
-  inLevels,
+  growthFactor,
+  inStateUnit,
   level,
-  other,
-  perLevel,
+  perStateUnit,
   positive,
-  pure,
+  quantityWithUnit,
   rate,
 } from "./quantities.js";
 
 const delayed = (lag: number): CatalogueEntry => ({
   name: "delayedDensity",
-  title: `Density that acts ${lag} periods late`,
-  text: `N[t+1] = N*exp(r*(1 - ${past("N", lag)}/K))`,
+  title: `Delayed density dependence: Ricker with a lag of ${periodCount(lag)}`,
+  text: `N[t+1] = N*exp(r*(1 - ${lagged("N", lag)}/K))`,
   source: "Levin and May (1976), A note on difference-delay equations, Theor. Popul. Biol. 9, 178-187",
-  quantities: { N: level, r: rate, K: capacity },
-  holds: ["r > 0", "K > 0", "N0 >= 0"],
+  quantities: { N: level, r: rate, K: carryingCapacity },
+  validWhen: ["r > 0", "K > 0", "N0 >= 0"],
   bounds: { r: positive, K: positive, N: positive },
   start: { r: 0.3 },
   equilibria: [{ at: { N: "0" } }, { at: { N: "K" }, ...(lag === 0 ? { multiplier: "1 - r" } : {}) }],
   closedForms: [],
-  remarks: `Stable if and only if r lies between 0 and 2*cos(pi*T/(2*T + 1)) = ${(2 * Math.cos((Math.PI * lag) / (2 * lag + 1))).toPrecision(6)}.`,
+  remarks: `With the lag T, stable if and only if r lies between 0 and 2*cos(pi*T/(2*T + 1)) = ${(2 * Math.cos((Math.PI * lag) / (2 * lag + 1))).toPrecision(6)}.`,
 });
 
-const host = other("host level", "level");
-const parasitoid = other("parasitoid level", "level");
-const search = perLevel("searching efficiency");
-const yieldOf = pure("parasitoids from one host attacked");
+const host = quantityWithUnit("host density", "level");
+const parasitoid = quantityWithUnit("parasitoid density", "level");
+const search = perStateUnit("searching efficiency");
+const yieldOf = dimensionless("parasitoids per attacked host");
 
 const nicholsonBailey: CatalogueEntry = {
   name: "nicholsonBailey",
-  title: "Host and parasitoid with random search",
+  title: "Nicholson-Bailey host-parasitoid model: random search",
   text: "spared = exp(-a*P)\nH[t+1] = lam*H*spared\nP[t+1] = c*H*(1 - spared)",
   source:
     "Nicholson and Bailey (1935), The balance of animal populations, Proc. Zool. Soc. Lond. 105, 551-598",
-  quantities: { H: host, P: parasitoid, lam: growth, a: search, c: yieldOf },
-  holds: ["lam > 1", "a > 0", "c > 0", "H0 >= 0", "P0 >= 0"],
+  quantities: { H: host, P: parasitoid, lam: growthFactor, a: search, c: yieldOf },
+  validWhen: ["lam > 1", "a > 0", "c > 0", "H0 >= 0", "P0 >= 0"],
   bounds: { lam: [1, Number.POSITIVE_INFINITY], a: positive, c: positive, H: positive, P: positive },
   start: { lam: 2, c: 1 },
   equilibria: [{ at: { H: "lam*log(lam)/((lam - 1)*a*c)", P: "log(lam)/a" } }],
   closedForms: [],
-  remarks: "Always unstable: swings grow until one of the two is gone.",
+  remarks: "Always unstable: oscillations grow until one of the two is extinct.",
 };
 
 const clumped: CatalogueEntry = {
   name: "clumpedParasitoid",
-  title: "Host and parasitoid with clumped search",
+  title: "Host-parasitoid model with aggregated attacks (negative binomial)",
   text: "spared = (1 + a*P/k)^(-k)\nH[t+1] = lam*H*spared\nP[t+1] = c*H*(1 - spared)",
   source: "May (1978), Host-parasitoid systems in patchy environments, J. Anim. Ecol. 47, 833-844",
   quantities: {
     H: host,
     P: parasitoid,
-    lam: growth,
+    lam: growthFactor,
     a: search,
     c: yieldOf,
-    k: pure("clumping, smaller is more clumped"),
+    k: dimensionless("aggregation: smaller values mean stronger clumping"),
   },
-  holds: ["lam > 1", "a > 0", "c > 0", "k > 0", "H0 >= 0", "P0 >= 0"],
+  validWhen: ["lam > 1", "a > 0", "c > 0", "k > 0", "H0 >= 0", "P0 >= 0"],
   bounds: {
     lam: [1, Number.POSITIVE_INFINITY],
     a: positive,
@@ -86,21 +86,21 @@ const clumped: CatalogueEntry = {
 
 const competition: CatalogueEntry = {
   name: "competition",
-  title: "Two competitors in steps",
+  title: "Two-species competition (Leslie-Gower)",
   text: "N1[t+1] = R1*N1/(1 + (N1 + a12*N2)/M1)\nN2[t+1] = R2*N2/(1 + (N2 + a21*N1)/M2)",
   source:
     "Leslie and Gower (1958), The properties of a stochastic model for two competing species, Biometrika 45, 316-330",
   quantities: {
     N1: level,
     N2: level,
-    R1: growth,
-    R2: growth,
-    M1: inLevels("crowding scale of the first"),
-    M2: inLevels("crowding scale of the second"),
-    a12: pure("effect of one of the second on the first"),
-    a21: pure("effect of one of the first on the second"),
+    R1: growthFactor,
+    R2: growthFactor,
+    M1: inStateUnit("crowding scale of species 1"),
+    M2: inStateUnit("crowding scale of species 2"),
+    a12: dimensionless("effect of one individual of species 2 on species 1"),
+    a21: dimensionless("effect of one individual of species 1 on species 2"),
   },
-  holds: ["R1 > 1", "R2 > 1", "M1 > 0", "M2 > 0", "a12 >= 0", "a21 >= 0", "N10 >= 0", "N20 >= 0"],
+  validWhen: ["R1 > 1", "R2 > 1", "M1 > 0", "M2 > 0", "a12 >= 0", "a21 >= 0", "N10 >= 0", "N20 >= 0"],
   bounds: {
     N1: positive,
     N2: positive,
@@ -126,51 +126,52 @@ const competition: CatalogueEntry = {
   ],
   closedForms: [],
   remarks:
-    "They stay together if and only if each can grow into the other's rest level. The system is monotone: no chaos.",
+    "Both persist if and only if each can invade the equilibrium of the other. The system is monotone, so there is no chaos.",
 };
 
-/** What adults and recruits need: the delay, and whether more adults always mean more recruits. */
-export interface RecruitOption extends DelayOption {
+/** The lag of recruitment, and whether more adults always mean more recruits. */
+export interface RecruitOption extends LagOption {
   readonly recruits?: "rising" | "humped";
 }
 
 function adults(lag: number, recruits: "rising" | "humped"): CatalogueEntry {
-  const parents = past("B", lag);
+  const parents = lagged("B", lag);
   const born = recruits === "rising" ? `a*${parents}/(1 + b*${parents})` : `a*${parents}*exp(-b*${parents})`;
-  const rest = recruits === "rising" ? "(a/(1 - s) - 1)/b" : "log(a/(1 - s))/b";
+  const equilibrium = recruits === "rising" ? "(a/(1 - s) - 1)/b" : "log(a/(1 - s))/b";
   return {
     name: "adultsAndRecruits",
-    title: `Adults that survive, and recruits ${lag} periods late`,
+    title: `Adult survival with recruitment delayed by ${periodCount(lag)}`,
     text: `B[t+1] = s*B + ${born}`,
     source: "Clark (1976), A delayed-recruitment model of population dynamics, J. Math. Biol. 3, 381-391",
     quantities: {
       B: level,
-      s: pure("share of adults that survive a period"),
-      a: growth,
-      b: perLevel("crowding of recruits"),
+      s: dimensionless("fraction of adults that survive one period"),
+      a: growthFactor,
+      b: perStateUnit("density dependence of recruitment"),
     },
-    holds: ["s >= 0 and s < 1", "a > 0", "b > 0", "B0 >= 0"],
+    validWhen: ["s >= 0 and s < 1", "a > 0", "b > 0", "B0 >= 0"],
     bounds: { s: fraction, a: positive, b: positive, B: positive },
     start: { s: 0.6, a: 1 },
-    equilibria: [{ at: { B: "0" } }, { at: { B: rest }, when: "a > 1 - s" }],
+    equilibria: [{ at: { B: "0" } }, { at: { B: equilibrium }, when: "a > 1 - s" }],
     closedForms: [],
     remarks:
-      "It rests where (1 - s)*B equals the recruits. The delay can upset the rest level where recruits are humped, not where they rise.",
+      "Equilibrium where (1 - s)*B equals recruitment. The delay can destabilize it when recruitment is hump-shaped (Ricker), not when it saturates (Beverton-Holt).",
   };
 }
 
 /** N' = N exp(r (1 - N[t-lag]/K)). */
-export const delayedDensityRule = ({ lag, ...options }: NamedRuleOptions & DelayOption): Rule =>
-  named(delayed(lag), options);
+export const delayedDensityRule = ({ lag, ...options }: NamedRuleOptions & LagOption): Rule =>
+  catalogueRule(delayed(lag), options);
 /** H' = lam H e^(-aP), P' = c H (1 - e^(-aP)). */
-export const nicholsonBaileyRule = (options?: NamedRuleOptions): Rule => named(nicholsonBailey, options);
+export const nicholsonBaileyRule = (options?: NamedRuleOptions): Rule =>
+  catalogueRule(nicholsonBailey, options);
 /** The same with (1 + aP/k)^(-k) spared. */
-export const clumpedParasitoidRule = (options?: NamedRuleOptions): Rule => named(clumped, options);
+export const clumpedParasitoidRule = (options?: NamedRuleOptions): Rule => catalogueRule(clumped, options);
 /** N1' = R1 N1/(1 + (N1 + a12 N2)/M1), and the same for N2. */
-export const competitionRule = (options?: NamedRuleOptions): Rule => named(competition, options);
+export const competitionRule = (options?: NamedRuleOptions): Rule => catalogueRule(competition, options);
 /** B' = s B + F(B[t-lag]), F rising or humped. */
 export const adultsAndRecruitsRule = ({
   lag,
   recruits = "rising",
   ...options
-}: NamedRuleOptions & RecruitOption): Rule => named(adults(lag, recruits), options);
+}: NamedRuleOptions & RecruitOption): Rule => catalogueRule(adults(lag, recruits), options);

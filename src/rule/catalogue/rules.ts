@@ -1,20 +1,20 @@
 import type { Rule } from "../rule.js";
-import * as crowding from "./crowding-rules.js";
+import type { NamedRuleOptions } from "./catalogue-rule.js";
 import * as culture from "./culture-rules.js";
-import type { DelayOption } from "./delay.js";
+import * as crowding from "./density-dependence-rules.js";
 import * as harvest from "./harvest-rules.js";
+import type { LagOption } from "./lag.js";
 import * as linear from "./linear-rules.js";
-import type { NamedRuleOptions } from "./named.js";
 import type { RecruitOption } from "./population-rules.js";
 import * as population from "./population-rules.js";
-import type { ShelfOption, StageOption } from "./stage-rules.js";
+import type { PerishableOption, StageOption } from "./stage-rules.js";
 import * as stage from "./stage-rules.js";
 import * as stock from "./stock-rules.js";
 
 type PlainRule = (options?: NamedRuleOptions) => Rule;
-type DelayedRule = (options: NamedRuleOptions & DelayOption) => Rule;
+type DelayedRule = (options: NamedRuleOptions & LagOption) => Rule;
 
-/** A function for each named rule. */
+/** One function per catalogue rule. */
 export interface RuleCatalogue {
   readonly constantChange: PlainRule;
   readonly geometric: PlainRule;
@@ -42,7 +42,7 @@ export interface RuleCatalogue {
   readonly sporadicDemand: PlainRule;
   readonly inventory: DelayedRule;
   readonly gapCorrection: DelayedRule;
-  readonly perishable: (options: NamedRuleOptions & ShelfOption) => Rule;
+  readonly perishable: (options: NamedRuleOptions & PerishableOption) => Rule;
   readonly delayedDensity: DelayedRule;
   readonly nicholsonBailey: PlainRule;
   readonly clumpedParasitoid: PlainRule;
@@ -53,8 +53,8 @@ export interface RuleCatalogue {
 }
 
 /**
- * The catalogue: rules that have a name, ready to be run, fitted and compared. Each is called for its rule;
- * options are those of `recurrence`, and for some a delay, a number of ages or a shelf life.
+ * The catalogue of named rules, ready to be run, fitted and compared. Each function returns its rule; options are
+ * those of `recurrence`, and for some a lag, a number of age classes or a shelf life, in periods.
  *
  * @example rules.bevertonHolt().text; // "N[t+1] = R*N/(1 + (R - 1)*N/K)"
  */

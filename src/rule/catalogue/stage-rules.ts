@@ -1,23 +1,24 @@
 import type { Rule } from "../rule.js";
-import { type NamedRuleOptions, named } from "./named.js";
+import { catalogueRule, type NamedRuleOptions } from "./catalogue-rule.js";
+import { periodCount } from "./lag.js";
 import type { CatalogueEntry, NamedQuantity } from "./named-rule.js";
-import { fraction, inLevels, level, positive, pure } from "./quantities.js";
+import { dimensionless, fraction, inStateUnit, level, positive } from "./quantities.js";
 
-const upTo = (count: number): readonly number[] => Array.from({ length: count }, (_, i) => i + 1);
+const oneTo = (count: number): readonly number[] => Array.from({ length: count }, (_, i) => i + 1);
 
 function record<T>(names: readonly string[], value: T): Record<string, T> {
   return Object.fromEntries(names.map((name) => [name, value]));
 }
 
 function ages(count: number): CatalogueEntry {
-  const all = upTo(count);
+  const all = oneTo(count);
   const births = all.map((k) => `f${k}*n${k}`).join(" + ");
   const later = all.slice(1).map((k) => `n${k}[t+1] = s${k - 1}*n${k - 1}`);
   const survivals = all.slice(1).map((k) => `s${k - 1}`);
   const fertilities = all.map((k) => `f${k}`);
   return {
     name: "ages",
-    title: `Projection matrix of ${count} ages`,
+    title: `Leslie matrix with ${count} age classes`,
     text: [`n1[t+1] = ${births}`, ...later].join("\n"),
     source: "Leslie (1945), On the use of matrices in certain population mathematics, Biometrika 33, 183-212",
     quantities: {
@@ -25,10 +26,10 @@ function ages(count: number): CatalogueEntry {
         all.map((k) => `n${k}`),
         level,
       ),
-      ...record(fertilities, pure("young a period from one of that age")),
-      ...record(survivals, pure("share that lives on to the next age")),
+      ...record(fertilities, dimensionless("offspring per period of one individual of that age")),
+      ...record(survivals, dimensionless("fraction surviving to the next age")),
     },
-    holds: [
+    validWhen: [
       ...fertilities.map((name) => `${name} >= 0`),
       ...survivals.map((name) => `${name} >= 0 and ${name} <= 1`),
     ],
@@ -42,11 +43,12 @@ function ages(count: number): CatalogueEntry {
       },
     ],
     closedForms: [],
-    remarks: "In the long run it grows by the dominant root, in stable proportions; elasticities sum to 1.",
+    remarks:
+      "In the long run it grows by the dominant eigenvalue, with a stable age distribution; elasticities sum to 1.",
   };
 }
 
-/** Names of stages, and which moves between them may happen; a share not listed is zero. */
+/** Names of stages, and the possible moves between them; the fraction of a move not listed is zero. */
 export interface StageOption {
   readonly stages: readonly string[];
   /** Pairs [from, to]; default every pair. */
@@ -63,32 +65,35 @@ function stages({ stages: names, moves }: StageOption): CatalogueEntry {
   const shares = all.map(([from, to]) => share(from, to));
   return {
     name: "stages",
-    title: "Shares that move between stages, as in overdue buckets of a loan book",
+    title: "Transition matrix between stages, such as delinquency buckets of a loan book",
     text: text.join("\n"),
     source: "common practice, no source",
     quantities: {
       ...record<NamedQuantity>(names, level),
       ...Object.fromEntries(
-        all.map(([from, to]) => [share(from, to), pure(`share of ${from} that moves to ${to}`)]),
+        all.map(([from, to]) => [
+          share(from, to),
+          dimensionless(`fraction of ${from} that moves to ${to} per period`),
+        ]),
       ),
     },
-    holds: shares.map((name) => `${name} >= 0`),
+    validWhen: shares.map((name) => `${name} >= 0`),
     bounds: record(shares, positive),
     equilibria: [],
     closedForms: [],
     remarks:
-      "Stages that nothing leaves, such as cleared and written off, fill up. Shares drift with season and policy.",
+      "Absorbing stages, such as repaid and written off, only fill up. Fractions drift with season and policy.",
   };
 }
 
-/** How long goods last, and which are given out first. */
-export interface ShelfOption {
+/** Shelf life in periods, and which goods are issued first. */
+export interface PerishableOption {
   readonly life: number;
   readonly issue?: "oldest-first" | "newest-first";
 }
 
-function shelf(life: number, issue: "oldest-first" | "newest-first"): CatalogueEntry {
-  const all = upTo(life);
+function perishable(life: number, issue: "oldest-first" | "newest-first"): CatalogueEntry {
+  const all = oneTo(life);
   const order = issue === "oldest-first" ? [...all].reverse() : all;
   const used = order.map((k, i) => {
     const left = ["d", ...order.slice(0, i).map((done) => `used${done}`)].join(" - ");
@@ -98,7 +103,7 @@ function shelf(life: number, issue: "oldest-first" | "newest-first"): CatalogueE
   const short = ["d", ...all.map((k) => `used${k}`)].join(" - ");
   return {
     name: "perishable",
-    title: `Goods that last ${life} periods, ${issue === "oldest-first" ? "oldest" : "newest"} first`,
+    title: `Perishable stock with a shelf life of ${periodCount(life)}, ${issue === "oldest-first" ? "oldest" : "newest"} issued first`,
     text: [...used, `outdated = a${life} - used${life}`, `short = ${short}`, "a1[t+1] = q", ...next].join(
       "\n",
     ),
@@ -109,30 +114,29 @@ function shelf(life: number, issue: "oldest-first" | "newest-first"): CatalogueE
         all.map((k) => `a${k}`),
         level,
       ),
-      q: inLevels("received at the end of the period"),
-      d: inLevels("demand of the period"),
+      q: inStateUnit("quantity received at the end of the period"),
+      d: inStateUnit("demand in the period"),
     },
-    holds: all.map((k) => `a${k}0 >= 0`),
+    validWhen: all.map((k) => `a${k}0 >= 0`),
     bounds: record(
       all.map((k) => `a${k}`),
       positive,
     ),
     equilibria: [],
     closedForms: [],
-    remarks:
-      "Which goods are given out first decides the waste. Demand beyond the shelf is lost, and reported as short.",
+    remarks: "The order of issue decides how much is wasted. Unmet demand is lost and reported as short.",
   };
 }
 
 /** n1' = f1 n1 + f2 n2 + ..., n2' = s1 n1, ... */
 export const agesRule = ({ ages: count, ...options }: NamedRuleOptions & { readonly ages: number }): Rule =>
-  named(ages(count), options);
-/** v' = P v, one share p_from_to a move. */
+  catalogueRule(ages(count), options);
+/** v' = P v, one fraction p_from_to for each move. */
 export const stagesRule = ({ stages: names, moves, ...options }: NamedRuleOptions & StageOption): Rule =>
-  named(stages(moves === undefined ? { stages: names } : { stages: names, moves }), options);
+  catalogueRule(stages(moves === undefined ? { stages: names } : { stages: names, moves }), options);
 /** Age classes a1 (newest) to the oldest, receipts q, demand d. */
 export const perishableRule = ({
   life,
   issue = "oldest-first",
   ...options
-}: NamedRuleOptions & ShelfOption): Rule => named(shelf(life, issue), options);
+}: NamedRuleOptions & PerishableOption): Rule => catalogueRule(perishable(life, issue), options);

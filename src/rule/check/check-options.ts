@@ -1,33 +1,48 @@
 import { ModelError } from "../../numeric/index.js";
+import { suggestion } from "../errors.js";
 import type { RecurrenceOptions } from "../recurrence-options.js";
-import { suggestion } from "../refusals.js";
 import type { CheckedRule } from "./checked-rule.js";
 
-function refuseName(option: string, name: string, allowed: readonly string[], what: string): ModelError {
+function unknownOptionNameError(
+  option: string,
+  name: string,
+  allowed: readonly string[],
+  what: string,
+): ModelError {
   const known = allowed.length === 0 ? "none" : allowed.join(", ");
   return new ModelError(
     "unknown-name",
-    `The option ${option} speaks of "${name}", which is no ${what} of the rule. Known: ${known}.${suggestion(name, allowed)}`,
+    `Option \`${option}\`: the rule has no ${what} "${name}". It has ${known}.${suggestion(name, allowed)}`,
     { option, name, known: allowed },
   );
 }
 
-function refuseValue(option: string, name: string, wanted: string, given: unknown): ModelError {
+function optionValueError(option: string, name: string, wanted: string, given: unknown): ModelError {
   const shown = JSON.stringify(given) ?? String(given);
   return new ModelError(
     "unreadable-option",
-    `The option ${option} gives ${shown} for "${name}". Give ${wanted}.`,
+    `Option \`${option}\`: "${name}" was given as ${shown}. Give ${wanted}.`,
     { option, name, given },
   );
 }
 
-type Fits = (value: never, name: string) => boolean;
+function checkName(name: unknown): void {
+  if (name === undefined || (typeof name === "string" && name.trim() !== "")) return;
+  const given = JSON.stringify(name) ?? String(name);
+  throw new ModelError(
+    "unreadable-option",
+    `Option \`name\` must be a text; ${given} was given. Write \`name: "crowding"\`.`,
+    { option: "name", given },
+  );
+}
+
+type Accepts = (value: never, name: string) => boolean;
 interface OptionCheck {
   readonly option: "units" | "bounds" | "start" | "fixed" | "initial" | "noise";
   readonly what: string;
   readonly names: readonly string[];
-  readonly wanted: (name: string) => string;
-  readonly fits: Fits;
+  readonly expected: (name: string) => string;
+  readonly accepts: Accepts;
 }
 
 const isNumber = (value: unknown): boolean => typeof value === "number" && Number.isFinite(value);
@@ -41,28 +56,28 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
       option: "units",
       what: "name",
       names: [...states, ...quantities, ...inputs, ...parameters, "t"],
-      wanted: () => 'a text such as "cells/mL"',
-      fits: (value: unknown) => typeof value === "string",
+      expected: () => 'a unit in quotes, such as "cells/mL"',
+      accepts: (value: unknown) => typeof value === "string",
     },
     {
       option: "bounds",
       what: "state or parameter",
       names: [...states, ...parameters],
-      wanted: () => "two numbers, lowest first, as in [0, Infinity]",
-      fits: (value: readonly [number, number]) =>
+      expected: () => "two numbers, the lower one first, as in [0, Infinity]",
+      accepts: (value: readonly [number, number]) =>
         Array.isArray(value) && value.length === 2 && value[0] < value[1],
     },
-    { option: "start", what: "parameter", names: parameters, wanted: number, fits: isNumber },
-    { option: "fixed", what: "parameter", names: parameters, wanted: number, fits: isNumber },
+    { option: "start", what: "parameter", names: parameters, expected: number, accepts: isNumber },
+    { option: "fixed", what: "parameter", names: parameters, expected: number, accepts: isNumber },
     {
       option: "initial",
       what: "state",
       names: states,
-      wanted: (name) =>
+      expected: (name) =>
         pastValues(name) === 0
           ? 'a finite number or "estimated"'
           : `${pastValues(name) + 1} numbers, oldest first, because the rule reads ${name}[t-${pastValues(name)}]`,
-      fits: (value: unknown, name: string) =>
+      accepts: (value: unknown, name: string) =>
         value === "estimated" ||
         (pastValues(name) === 0
           ? isNumber(value)
@@ -72,9 +87,8 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
       option: "noise",
       what: "state",
       names: states,
-      wanted: () =>
-        '{ distribution: "normal" | "lognormal", sd: a number or the name of a parameter of the rule }',
-      fits: (value: { distribution?: unknown; sd?: unknown } | null) =>
+      expected: () => '{ distribution: "normal" or "lognormal", sd: a number or the name of a parameter }',
+      accepts: (value: { distribution?: unknown; sd?: unknown } | null) =>
         (value?.distribution === "normal" || value?.distribution === "lognormal") &&
         ((typeof value.sd === "string" && parameters.includes(value.sd)) ||
           (isNumber(value.sd) && (value.sd as number) >= 0)),
@@ -82,13 +96,14 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
   ];
 }
 
-/** Refuses options that speak of names the rule has not, or give values that fit no meaning. */
+/** Rejects options for names that the rule does not have, and values of the wrong kind. */
 export function checkOptions(rule: CheckedRule, options: RecurrenceOptions): void {
-  for (const { option, what, names, wanted, fits } of checks(rule)) {
+  checkName(options.name);
+  for (const { option, what, names, expected, accepts } of checks(rule)) {
     for (const [name, value] of Object.entries(options[option] ?? {})) {
-      if (!names.includes(name)) throw refuseName(option, name, names, what);
-      // Each check reads what its own option may hold.
-      if (!fits(value as never, name)) throw refuseValue(option, name, wanted(name), value);
+      if (!names.includes(name)) throw unknownOptionNameError(option, name, names, what);
+      // Each check narrows the values of its own option.
+      if (!accepts(value as never, name)) throw optionValueError(option, name, expected(name), value);
     }
   }
 }

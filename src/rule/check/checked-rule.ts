@@ -1,7 +1,7 @@
 import type { Warning } from "../../numeric/index.js";
 import type { Statement } from "../syntax/expression.js";
 
-/** Lines whose every name has a meaning and whose every call has its number of values. */
+/** A rule whose names are resolved and whose calls have the right number of arguments. */
 export interface CheckedRule {
   readonly text: string;
   readonly statements: readonly Statement[];
@@ -14,8 +14,8 @@ export interface CheckedRule {
   readonly findings: readonly Warning[];
 }
 
-/** What the analyst declared beside the text. */
-export interface Declared {
+/** Names declared in the options. */
+export interface Declarations {
   /** Absent: every free name is a parameter. */
   readonly parameters?: readonly string[] | undefined;
   readonly inputs: readonly string[];

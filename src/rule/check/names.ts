@@ -1,11 +1,11 @@
 import { ModelError } from "../../numeric/index.js";
+import { ruleError, unknownNameError } from "../errors.js";
 import { reservedWords, ruleFunctions } from "../functions.js";
-import { refuse, unknownName } from "../refusals.js";
 import type { Statement } from "../syntax/expression.js";
 import type { Span } from "../syntax/token.js";
-import type { Declared } from "./checked-rule.js";
+import type { Declarations } from "./checked-rule.js";
 
-/** What the names of one rule mean, filled while its lines are read in order. */
+/** The names of one rule by role, filled while its lines are read in order. */
 export interface Names {
   readonly text: string;
   readonly states: ReadonlySet<string>;
@@ -21,53 +21,49 @@ export interface Names {
   readonly lags: Map<string, number>;
 }
 
-function refuseSecond(text: string, place: Span, name: string): Error {
-  const wrong = `"${name}" is set twice.`;
-  return refuse("set-twice", text, place, wrong, "Keep one of the lines, or give the other another name.");
+function setTwiceError(text: string, place: Span, name: string): Error {
+  const wrong = `"${name}" is set by two lines.`;
+  return ruleError("set-twice", text, place, wrong, "Remove one of the lines, or use another name in it.");
 }
 
-function refuseSetInput(text: string, place: Span, name: string, kind: string): Error {
-  const wrong = `"${name}" is declared as ${kind}, and a line sets it.`;
-  return refuse(
+function setDeclaredNameError(text: string, place: Span, name: string, kind: string): Error {
+  const wrong = `"${name}" is declared as ${kind}, but this line sets it.`;
+  return ruleError(
     "set-twice",
     text,
     place,
     wrong,
-    `Take it out of ${kind === "an input" ? "inputs" : "parameters"}.`,
+    `Remove it from \`${kind === "an input" ? "inputs" : "parameters"}\`.`,
   );
 }
 
-const refuseReserved = (name: string): Error =>
-  new ModelError(
-    "reserved-name",
-    `"${name}" has a meaning of its own in rules. Choose another name for it.`,
-    {
-      name,
-    },
-  );
+const reservedNameError = (name: string): Error =>
+  new ModelError("reserved-name", `"${name}" is a reserved word of the rule language. Choose another name.`, {
+    name,
+  });
 
-const refuseTwoRoles = (name: string): Error =>
+const twoRolesError = (name: string): Error =>
   new ModelError(
     "two-roles",
-    `"${name}" is declared both as a parameter and as an input. Keep one of the two.`,
+    `"${name}" is listed in both \`parameters\` and \`inputs\`. Remove it from one of them.`,
     {
       name,
     },
   );
 
-/** Sorts the names that lines set into states and quantities. */
-export function namesOf(text: string, statements: readonly Statement[], declared: Declared): Names {
+/** Divides the names that lines set into states and quantities. */
+export function namesOf(text: string, statements: readonly Statement[], declared: Declarations): Names {
   const states = new Set<string>();
   const quantityLines = new Map<string, number>();
   const inputs = new Set(declared.inputs);
   for (const name of [...inputs, ...(declared.parameters ?? [])]) {
-    if (reservedWords.has(name)) throw refuseReserved(name);
-    if (inputs.has(name) && declared.parameters?.includes(name)) throw refuseTwoRoles(name);
+    if (reservedWords.has(name)) throw reservedNameError(name);
+    if (inputs.has(name) && declared.parameters?.includes(name)) throw twoRolesError(name);
   }
   statements.forEach(({ kind, name, nameAt }, line) => {
-    if (states.has(name) || quantityLines.has(name)) throw refuseSecond(text, nameAt, name);
-    if (inputs.has(name)) throw refuseSetInput(text, nameAt, name, "an input");
-    if (declared.parameters?.includes(name)) throw refuseSetInput(text, nameAt, name, "a parameter");
+    if (states.has(name) || quantityLines.has(name)) throw setTwiceError(text, nameAt, name);
+    if (inputs.has(name)) throw setDeclaredNameError(text, nameAt, name, "an input");
+    if (declared.parameters?.includes(name)) throw setDeclaredNameError(text, nameAt, name, "a parameter");
     if (kind === "quantity") quantityLines.set(name, line);
     else states.add(name);
   });
@@ -83,10 +79,10 @@ export function namesOf(text: string, statements: readonly Statement[], declared
   };
 }
 
-/** The refusal of a name that is none of the known ones. */
-export function refuseUnknown(names: Names, place: Span, name: string): Error {
+/** The error for a name that is not declared. */
+export function undeclaredNameError(names: Names, place: Span, name: string): Error {
   const others = [...names.states, ...names.quantityLines.keys(), ...names.inputs];
   const parameters = [...(names.declared ?? [])];
   const functions = ruleFunctions.map((one) => one.name);
-  return unknownName(names.text, place, name, { parameters, others, functions });
+  return unknownNameError(names.text, place, name, { parameters, others, functions });
 }

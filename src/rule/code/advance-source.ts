@@ -4,40 +4,40 @@ import { type EmittedProgram, emitProgram } from "./emit-program.js";
 import { lines, readArguments } from "./source-parts.js";
 
 const sharedByPaths: ReadonlySet<LeafRole> = new Set(["parameter", "input", "period"]);
-const ofTheirOwn: ReadonlySet<LeafRole> = new Set(["input", "period"]);
+const fixedPerPath: ReadonlySet<LeafRole> = new Set(["input", "period"]);
 
-/** Paths that an unlimited loop takes at once: their steps overlap in the processor, and one look serves them all. */
-const abreast = 8;
+/** Paths stepped in one turn of the unrolled loop: their steps overlap in the processor, and one check serves all. */
+const unrollFactor = 8;
 
-/** The lines that step the path whose state vector begins at a place, between those that read and write it. */
+/** Source that steps the path whose state vector starts at `place`. */
 function stepLines(rule: RuleGraph, program: EmittedProgram, place: string): readonly string[] {
   return [
     lines(rule.states, (i) => `const s${i} = present[${place} + ${i}];`),
-    ...program.inside,
+    ...program.body,
     lines(rule.states, (i) => `const n${i} = ${program.read(rule.next[i]!)};`),
     lines(rule.states, (i) => `present[${place} + ${i}] = n${i};`),
   ];
 }
 
 /**
- * A loop over most paths of a rule of one value, for limits that hold everything finite. A sum that is finite says
- * that all its parts are; one that is not leaves the lot to the loop that looks at each.
+ * Unrolled loop for a rule of one state without bounds. A finite sum shows that every path of the group is finite;
+ * otherwise each is checked.
  */
-function unlimitedLoop(rule: RuleGraph, program: EmittedProgram): readonly string[] {
+function unrolledLoop(rule: RuleGraph, program: EmittedProgram): readonly string[] {
   const step = (k: number): readonly string[] => [
     "{",
     ...stepLines(rule, program, `path + ${k}`),
     `e${k} = n0;`,
     "}",
   ];
-  const sum = Array.from({ length: abreast / 2 }, (_, k) => `(e${2 * k} + e${2 * k + 1})`).join(" + ");
+  const sum = Array.from({ length: unrollFactor / 2 }, (_, k) => `(e${2 * k} + e${2 * k + 1})`).join(" + ");
   return [
     "if (low0 === -Number.MAX_VALUE && high0 === Number.MAX_VALUE) {",
-    lines(abreast, (k) => `let e${k} = 0;`),
-    `for (; path + ${abreast} <= last; path += ${abreast}) {`,
-    ...Array.from({ length: abreast }, (_, k) => step(k)).flat(),
+    lines(unrollFactor, (k) => `let e${k} = 0;`),
+    `for (; path + ${unrollFactor} <= last; path += ${unrollFactor}) {`,
+    ...Array.from({ length: unrollFactor }, (_, k) => step(k)).flat(),
     `const sum = ${sum};`,
-    `if (sum - sum !== 0) for (let at = path; at < path + ${abreast}; at++) {`,
+    `if (sum - sum !== 0) for (let at = path; at < path + ${unrollFactor}; at++) {`,
     "if (!(present[at] >= low0 && present[at] <= high0)) present[at] = NaN;",
     "}",
     "}",
@@ -45,9 +45,9 @@ function unlimitedLoop(rule: RuleGraph, program: EmittedProgram): readonly strin
   ];
 }
 
-/** Body of `advance(present, first, last, parameters, inputs, t, limits)`: whatever paths share stands before the loops. */
+/** Body of `advance(present, first, last, parameters, inputs, t, limits)`; what all paths share is computed before the loops. */
 export function advanceSource(rule: RuleGraph, shared: boolean): string {
-  const program = emitProgram(rule.next, shared ? sharedByPaths : ofTheirOwn);
+  const program = emitProgram(rule.next, shared ? sharedByPaths : fixedPerPath);
   const { states, parameters, observed } = rule;
   const own = lines(parameters, (i) => `const c${i} = parameters[path * ${parameters} + ${i}];`);
   const within = Array.from({ length: observed }, (_, i) => `n${i} >= low${i} && n${i} <= high${i}`).join(
@@ -56,9 +56,9 @@ export function advanceSource(rule: RuleGraph, shared: boolean): string {
   return [
     lines(observed, (i) => `const low${i} = limits[${2 * i}];\nconst high${i} = limits[${2 * i + 1}];`),
     shared ? readArguments(rule) : readArguments({ ...rule, parameters: 0 }),
-    ...program.before,
+    ...program.preamble,
     "let path = first;",
-    ...(shared && states === 1 ? unlimitedLoop(rule, program) : []),
+    ...(shared && states === 1 ? unrolledLoop(rule, program) : []),
     `for (let at = path * ${states}; path < last; path++, at += ${states}) {`,
     shared ? "" : own,
     ...stepLines(rule, program, "at"),

@@ -4,9 +4,9 @@ import { ruleDefinition } from "../rule-definition.js";
 import { generateRule } from "./generate-rule.js";
 import { interpretGraph } from "./interpret-graph.js";
 
-const compiled = new WeakMap<Rule, CompiledRule>();
+const cache = new WeakMap<Rule, CompiledRule>();
 
-/** Whether this place allows functions to be made from source; some hosts forbid it. */
+/** Whether functions can be made from source here; some hosts forbid it. */
 function allowsGeneratedCode(): boolean {
   try {
     new Function("");
@@ -17,20 +17,20 @@ function allowsGeneratedCode(): boolean {
 }
 
 /**
- * Makes a rule ready to run over typed arrays, once for each rule.
+ * Compiles a rule to functions over typed arrays; the result is cached for each rule.
  *
- * The functions are generated from the checked expression graph and hold slots only, no name of the text.
- * Where generated code is forbidden the interpreter serves, with the same numbers.
+ * The functions are generated from the checked expression graph and contain slots only, no name of the text.
+ * Where generated code is forbidden, the interpreter gives the same numbers.
  *
- * @param rule - from `recurrence`; a copy of one (from another thread, or a file) is read again from its text.
+ * @param rule - from `recurrence`; a copy (from another thread or a file) is read again from its text.
  * @returns step, path and path with exact sensitivities; shapes in `CompiledRule`.
  * @example const { step } = compileRule(recurrence("N[t+1] = R*N"));
  */
 export function compileRule(rule: Rule): CompiledRule {
-  let found = compiled.get(rule);
+  let found = cache.get(rule);
   if (found === undefined) {
     found = allowsGeneratedCode() ? generateRule(ruleDefinition(rule).graph) : interpretRule(rule);
-    compiled.set(rule, found);
+    cache.set(rule, found);
   }
   return found;
 }

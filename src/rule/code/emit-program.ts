@@ -1,42 +1,42 @@
 import type { LeafRole, Node } from "../graph/node.js";
 import { operations } from "../graph/operations.js";
 
-/** Source for a set of nodes: what can stand before a loop, and what belongs inside it. */
+/** Source for a set of nodes, divided into loop-invariant lines and the body of the loop. */
 export interface EmittedProgram {
-  readonly before: readonly string[];
-  readonly inside: readonly string[];
-  /** The expression that holds a node's value, inside the loop. */
+  readonly preamble: readonly string[];
+  readonly body: readonly string[];
+  /** The expression for a node's value inside the loop. */
   readonly read: (node: Node) => string;
 }
 
 /** Deeper expressions are cut into local variables, to spare the compiler's stack. */
-const deepest = 24;
+const maxDepth = 24;
 
-interface Facts {
+interface GraphUse {
   readonly uses: Map<Node, number>;
   readonly varies: Map<Node, boolean>;
   readonly ordered: Node[];
 }
 
-/** What stays the same from turn to turn of a loop over periods. */
+/** Leaves that are constant in a loop over periods. */
 const parametersOnly: ReadonlySet<LeafRole> = new Set(["parameter"]);
 
-/** Counts uses, finds which nodes change from turn to turn, and orders arguments before what uses them. */
-function survey(roots: readonly Node[], fixed: ReadonlySet<LeafRole>): Facts {
-  const facts: Facts = { uses: new Map(), varies: new Map(), ordered: [] };
+/** Counts uses, finds which nodes vary in the loop, and orders arguments before the nodes that use them. */
+function analyze(roots: readonly Node[], fixed: ReadonlySet<LeafRole>): GraphUse {
+  const use: GraphUse = { uses: new Map(), varies: new Map(), ordered: [] };
   const visit = (node: Node): void => {
-    facts.uses.set(node, (facts.uses.get(node) ?? 0) + 1);
-    if (facts.varies.has(node)) return;
-    if (node.kind === "inner") for (const part of node.inside) visit(part);
+    use.uses.set(node, (use.uses.get(node) ?? 0) + 1);
+    if (use.varies.has(node)) return;
+    if (node.kind === "inner") for (const part of node.args) visit(part);
     const varies =
       node.kind === "leaf"
         ? !fixed.has(node.role)
-        : node.kind === "inner" && node.inside.some((part) => facts.varies.get(part)!);
-    facts.varies.set(node, varies);
-    facts.ordered.push(node);
+        : node.kind === "inner" && node.args.some((part) => use.varies.get(part)!);
+    use.varies.set(node, varies);
+    use.ordered.push(node);
   };
   roots.forEach(visit);
-  return facts;
+  return use;
 }
 
 function numberSource(value: number): string {
@@ -53,44 +53,44 @@ function leafSource(node: Extract<Node, { kind: "leaf" }>): string {
   return node.offset === 0 ? `u${node.slot}[t]` : `u${node.slot}[t + ${node.offset}]`.replace("+ -", "- ");
 }
 
-/** Whether a node gets a variable: it is used twice or nested deep, or leaves the loop. */
-function needsVariable(node: Node, facts: Facts, depth: number): boolean {
+/** Whether a node gets a variable: it is used twice, nested deeply, or loop-invariant. */
+function needsVariable(node: Node, use: GraphUse, depth: number): boolean {
   if (node.kind === "leaf") return node.role === "input";
-  return node.kind === "inner" && (facts.uses.get(node)! > 1 || depth > deepest || !facts.varies.get(node)!);
+  return node.kind === "inner" && (use.uses.get(node)! > 1 || depth > maxDepth || !use.varies.get(node)!);
 }
 
 /**
  * Writes source for the roots and everything below them. Variables are `v` and the node's id; leaves must be
- * in scope as s0, c0, u0, t. `fixed` are the roles whose leaves stay the same in every turn of the loop.
+ * in scope as s0, c0, u0, t. `fixed` are the roles whose leaves are constant in the loop.
  */
 export function emitProgram(
   roots: readonly Node[],
   fixed: ReadonlySet<LeafRole> = parametersOnly,
 ): EmittedProgram {
-  const facts = survey(roots, fixed);
-  const before: string[] = [];
-  const inside: string[] = [];
+  const use = analyze(roots, fixed);
+  const preamble: string[] = [];
+  const body: string[] = [];
   const sources = new Map<Node, string>();
   const depths = new Map<Node, number>();
-  for (const node of facts.ordered) {
+  for (const node of use.ordered) {
     if (node.kind === "number") {
       sources.set(node, numberSource(node.value));
       continue;
     }
     let source = node.kind === "leaf" ? leafSource(node) : innerSource(node, sources);
-    let depth = node.kind === "leaf" ? 0 : 1 + Math.max(...node.inside.map((part) => depths.get(part) ?? 0));
-    if (needsVariable(node, facts, depth)) {
-      (facts.varies.get(node)! ? inside : before).push(`const v${node.id} = ${source};`);
+    let depth = node.kind === "leaf" ? 0 : 1 + Math.max(...node.args.map((part) => depths.get(part) ?? 0));
+    if (needsVariable(node, use, depth)) {
+      (use.varies.get(node)! ? body : preamble).push(`const v${node.id} = ${source};`);
       source = `v${node.id}`;
       depth = 0;
     }
     sources.set(node, source);
     depths.set(node, depth);
   }
-  return { before, inside, read: (node) => sources.get(node)! };
+  return { preamble: preamble, body: body, read: (node) => sources.get(node)! };
 }
 
 function innerSource(node: Extract<Node, { kind: "inner" }>, sources: ReadonlyMap<Node, string>): string {
-  const [a = "", b = "", c = ""] = node.inside.map((part) => sources.get(part)!);
+  const [a = "", b = "", c = ""] = node.args.map((part) => sources.get(part)!);
   return operations[node.operator].code(a, b, c);
 }

@@ -8,30 +8,30 @@ import { sensitivitySource } from "./sensitivity-source.js";
 import { stepSumsSource } from "./step-sums-source.js";
 import { sumsSource } from "./sums-source.js";
 
-/** Wider sensitivity tables would fill the registers' spill space many times over; a plain loop serves them. */
-const widestTable = 400;
+/** Wider sensitivity tables exceed the registers many times over; the interpreter handles them. */
+const maxTableSize = 400;
 
-/** With more unknowns than this the sums no longer fit into registers, and are gathered from a table instead. */
-const mostSummed = 8;
+/** With more unknowns than this the sums no longer fit into registers, and are computed from a table instead. */
+const maxSummedUnknowns = 8;
 
-/** Functions by their source: rules that read the same share one, and its optimisation. */
-const made = new Map<string, unknown>();
-const mostKept = 500;
+/** Functions by their source: rules with the same code share one optimised function. */
+const functionCache = new Map<string, unknown>();
+const maxCached = 500;
 
-/** Makes a function of source that holds only slots, numbers and operations of our own tables. */
+/** Compiles source that contains only slots, numbers and operations of our own tables. */
 function makeFunction<T>(parameters: string, body: string): T {
   const source = `"use strict";\nreturn (${parameters}) => {\n${body}\n};`;
-  let found = made.get(source);
+  let found = functionCache.get(source);
   if (found === undefined) {
-    if (made.size >= mostKept) made.clear();
+    if (functionCache.size >= maxCached) functionCache.clear();
     found = new Function("roundTo", "modulo", source)(roundTo, modulo);
-    made.set(source, found);
+    functionCache.set(source, found);
   }
   return found as T; // the parameters and the body are those of the member that T names
 }
 
-/** Puts off the work until the function is first called; later calls go straight to it. */
-function late<T>(make: () => T): () => T {
+/** Defers the work to the first call and keeps its result. */
+function lazy<T>(make: () => T): () => T {
   let found: T | undefined;
   return () => {
     found ??= make();
@@ -39,19 +39,19 @@ function late<T>(make: () => T): () => T {
   };
 }
 
-/** The rule as generated functions, each made when first read. */
+/** The rule as generated functions, each compiled on first use. */
 export function generateRule(rule: RuleGraph): CompiledRule {
-  const step = late(() =>
+  const step = lazy(() =>
     makeFunction<CompiledRule["step"]>("state, parameters, inputs, t, next", stepSource(rule)),
   );
-  const path = late(() =>
+  const path = lazy(() =>
     makeFunction<CompiledRule["path"]>(
       "initial, parameters, inputs, from, periods, values",
       pathSource(rule),
     ),
   );
-  const pathWithSensitivities = late(() =>
-    rule.states * (rule.states + rule.parameters) > widestTable
+  const pathWithSensitivities = lazy(() =>
+    rule.states * (rule.states + rule.parameters) > maxTableSize
       ? interpretGraph(rule).pathWithSensitivities
       : makeFunction<CompiledRule["pathWithSensitivities"]>(
           "initial, parameters, inputs, from, periods, values, sensitivities",
@@ -59,7 +59,7 @@ export function generateRule(rule: RuleGraph): CompiledRule {
         ),
   );
   const [plainSums, logSums] = [false, true].map((logarithmic) =>
-    late(() =>
+    lazy(() =>
       makeFunction<PathSums>(
         "initial, parameters, inputs, from, periods, observed, weights, sums",
         sumsSource(rule, logarithmic),
@@ -67,7 +67,7 @@ export function generateRule(rule: RuleGraph): CompiledRule {
     ),
   ) as [() => PathSums, () => PathSums];
   const [advance, advanceEach] = [true, false].map((shared) =>
-    late(() =>
+    lazy(() =>
       makeFunction<Advance>(
         "present, first, last, parameters, inputs, t, limits",
         advanceSource(rule, shared),
@@ -75,14 +75,14 @@ export function generateRule(rule: RuleGraph): CompiledRule {
     ),
   ) as [() => Advance, () => Advance];
   const [plainSteps, logSteps] = [false, true].map((logarithmic) =>
-    late(() =>
+    lazy(() =>
       makeFunction<StepSums>(
         "parameters, inputs, periods, from, observed, weights, sums",
         stepSumsSource(rule, logarithmic),
       ),
     ),
   ) as [() => StepSums, () => StepSums];
-  const summed = rule.states + rule.parameters <= mostSummed;
+  const summed = rule.states + rule.parameters <= maxSummedUnknowns;
   return {
     stepSums: summed ? (logarithmic) => (logarithmic ? logSteps() : plainSteps()) : undefined,
     pathSums: summed ? (logarithmic) => (logarithmic ? logSums() : plainSums()) : undefined,

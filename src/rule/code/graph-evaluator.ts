@@ -1,27 +1,20 @@
+import type { StepArguments } from "../explain-failure.js";
 import { graphOrder } from "../graph/graph-order.js";
 import type { Node } from "../graph/node.js";
 import { operations } from "../graph/operations.js";
 
-/** Where a step stands: present values, parameters, input columns and the period index. */
-export type Place = Readonly<{
-  state: Float64Array;
-  parameters: Float64Array;
-  inputs: readonly Float64Array[];
-  t: number;
-}>;
-
-function leafValue(node: Extract<Node, { kind: "leaf" }>, place: Place): number {
+function leafValue(node: Extract<Node, { kind: "leaf" }>, place: StepArguments): number {
   if (node.role === "state") return place.state[node.slot]!;
   if (node.role === "parameter") return place.parameters[node.slot]!;
   if (node.role === "period") return place.t;
   return place.inputs[node.slot]![place.t + node.offset] ?? Number.NaN;
 }
 
-/** Gives the value that a node had at the place last worked out. */
+/** Gives the value of a node in the last evaluation. */
 export type ReadNode = (node: Node) => number;
 
-/** Works out nodes one after the other; the same operations in the same order as the generated code. */
-export function graphEvaluator(roots: readonly Node[]): (place: Place) => ReadNode {
+/** Evaluates nodes one after the other: the same operations in the same order as the generated code. */
+export function graphEvaluator(roots: readonly Node[]): (place: StepArguments) => ReadNode {
   const ordered = graphOrder(roots);
   const position = new Map(ordered.map((node, index) => [node, index]));
   const tape = new Float64Array(ordered.length);
@@ -31,7 +24,7 @@ export function graphEvaluator(roots: readonly Node[]): (place: Place) => ReadNo
       if (node.kind === "number") tape[index] = node.value;
       else if (node.kind === "leaf") tape[index] = leafValue(node, place);
       else {
-        const [a, b = a!, c = a!] = node.inside;
+        const [a, b = a!, c = a!] = node.args;
         tape[index] = operations[node.operator].value(read(a!), read(b), read(c));
       }
     });

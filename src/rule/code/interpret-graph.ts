@@ -1,11 +1,11 @@
 import type { Advance, CompiledRule } from "../compiled-rule.js";
 import type { RuleGraph } from "../graph/rule-graph.js";
-import { stepDerivatives } from "../graph/step-derivatives.js";
+import { stepJacobian } from "../graph/step-jacobian.js";
 import { graphEvaluator, type ReadNode } from "./graph-evaluator.js";
 
 /** Sensitivities [states, unknowns] after a step, from those before it and the slopes of the step. */
 function nextSensitivities(rule: RuleGraph, read: ReadNode, before: Float64Array, after: Float64Array): void {
-  const { byState, byParameter } = stepDerivatives(rule);
+  const { byState, byParameter } = stepJacobian(rule);
   const zero = rule.graph.number(0);
   const unknowns = rule.parameters + rule.states;
   for (let cell = 0; cell < after.length; cell++) {
@@ -20,7 +20,7 @@ function nextSensitivities(rule: RuleGraph, read: ReadNode, before: Float64Array
   }
 }
 
-/** The rule as plain loops over its graph, for places that forbid generated code. */
+/** The rule as plain loops over its graph, for hosts that forbid generated code. */
 export function interpretGraph(rule: RuleGraph): CompiledRule {
   const width = rule.states;
   const evaluateStep = graphEvaluator(rule.next);
@@ -67,7 +67,7 @@ function interpretAdvance(rule: RuleGraph, step: CompiledRule["step"], shared: b
 function interpretSensitivities(rule: RuleGraph): CompiledRule["pathWithSensitivities"] {
   const width = rule.states;
   const table = width * (rule.parameters + width);
-  const { byState, byParameter } = stepDerivatives(rule);
+  const { byState, byParameter } = stepJacobian(rule);
   const evaluateAll = graphEvaluator([...rule.next, ...byState.flat(), ...byParameter.flat()]);
   return (initial, parameters, inputs, from, periods, values, sensitivities) => {
     const state = initial.slice(0, width);

@@ -8,8 +8,8 @@ export function stepSource(rule: RuleGraph): string {
   return [
     readArguments(rule),
     lines(rule.states, (i) => `const s${i} = state[${i}];`),
-    ...program.before,
-    ...program.inside,
+    ...program.preamble,
+    ...program.body,
     // All are worked out before any is written: `next` may be the same array as `state`.
     lines(rule.states, (i) => `const n${i} = ${program.read(rule.next[i]!)};`),
     lines(rule.states, (i) => `next[${i}] = n${i};`),
@@ -22,9 +22,9 @@ export function pathSource(rule: RuleGraph): string {
   return [
     readArguments(rule),
     lines(rule.states, (i) => `let s${i} = initial[${i}];\nvalues[${i}] = s${i};`),
-    ...program.before,
+    ...program.preamble,
     `for (let i = 1, at = ${rule.states}, t = from; i <= periods; i++, t++, at += ${rule.states}) {`,
-    ...program.inside,
+    ...program.body,
     lines(rule.states, (i) => `const n${i} = ${program.read(rule.next[i]!)};`),
     lines(rule.states, (i) => `s${i} = n${i};\nvalues[at + ${i}] = n${i};`),
     "}",

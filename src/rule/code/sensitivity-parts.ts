@@ -1,9 +1,9 @@
 import type { RuleGraph } from "../graph/rule-graph.js";
-import { stepDerivatives } from "../graph/step-derivatives.js";
+import { stepJacobian } from "../graph/step-jacobian.js";
 import { type EmittedProgram, emitProgram } from "./emit-program.js";
 import { sensitivityPattern } from "./sensitivity-pattern.js";
 
-/** A sensitivity in local variables: of which slot, to which unknown, and its place in a row of the table. */
+/** A sensitivity held in a local variable: of which slot, to which unknown, and its position in a row of the table. */
 export interface SensitivityCell {
   readonly slot: number;
   readonly unknown: number;
@@ -12,25 +12,25 @@ export interface SensitivityCell {
   readonly live: boolean;
 }
 
-/** What every function that carries sensitivities along a path is put together from. */
+/** The source parts of every function that computes sensitivities along a path. */
 export interface SensitivityParts {
   readonly program: EmittedProgram;
   readonly cells: readonly SensitivityCell[];
   /** `let` lines at the initial state. */
   readonly declared: readonly string[];
-  /** `const` lines of the next period, and the lines that then move there. */
+  /** `const` lines of the next period, and the lines that assign them. */
   readonly next: readonly string[];
   readonly moved: readonly string[];
 }
 
-/** The line that works out one sensitivity in the next period; terms that are always zero are left out. */
+/** The line that computes one sensitivity in the next period; terms that are always zero are left out. */
 function nextLine(
   rule: RuleGraph,
   pattern: readonly (readonly boolean[])[],
   program: EmittedProgram,
   { slot, unknown }: SensitivityCell,
 ): string {
-  const { byState, byParameter } = stepDerivatives(rule);
+  const { byState, byParameter } = stepJacobian(rule);
   const slopes = byState[slot]!.map(program.read);
   const terms = slopes.flatMap((slope, k) => {
     if (slope === "0" || !pattern[k]![unknown]) return [];
@@ -43,7 +43,7 @@ function nextLine(
 
 /** Recurrence of the sensitivities: d x' / d p = sum over states (d f / d x)(d x / d p) + d f / d p. */
 export function sensitivityParts(rule: RuleGraph): SensitivityParts {
-  const { byState, byParameter } = stepDerivatives(rule);
+  const { byState, byParameter } = stepJacobian(rule);
   const program = emitProgram([...rule.next, ...byState.flat(), ...byParameter.flat()]);
   const pattern = sensitivityPattern(rule);
   const unknowns = rule.parameters + rule.states;

@@ -1,12 +1,12 @@
 import type { RuleGraph } from "../graph/rule-graph.js";
-import { stepDerivatives } from "../graph/step-derivatives.js";
+import { stepJacobian } from "../graph/step-jacobian.js";
 
 /**
  * Which sensitivities can ever differ from zero, [slot][parameters then initial states]: a slot depends on an
  * unknown at once, or through a slot that it reads.
  */
 export function sensitivityPattern(rule: RuleGraph): readonly (readonly boolean[])[] {
-  const { byState, byParameter } = stepDerivatives(rule);
+  const { byState, byParameter } = stepJacobian(rule);
   const zero = rule.graph.number(0);
   const pattern = rule.next.map((_, slot) => [
     ...byParameter[slot]!.map((node) => node !== zero),

@@ -1,5 +1,5 @@
 import type { RuleGraph } from "../graph/rule-graph.js";
-import { stepDerivatives } from "../graph/step-derivatives.js";
+import { stepJacobian } from "../graph/step-jacobian.js";
 import { type EmittedProgram, emitProgram } from "./emit-program.js";
 import { lines, readArguments } from "./source-parts.js";
 
@@ -10,7 +10,7 @@ import { lines, readArguments } from "./source-parts.js";
  * @param logarithmic - compares log x with what is observed, instead of x.
  */
 export function stepSumsSource(rule: RuleGraph, logarithmic: boolean): string {
-  const { byParameter } = stepDerivatives(rule);
+  const { byParameter } = stepJacobian(rule);
   const program = emitProgram([...rule.next, ...byParameter.flat()]);
   const unknowns = Array.from({ length: rule.parameters }, (_, unknown) => unknown);
   const pairs = unknowns.flatMap((a) => unknowns.slice(a).map((b) => `g${a}_${b}`));
@@ -19,11 +19,11 @@ export function stepSumsSource(rule: RuleGraph, logarithmic: boolean): string {
     readArguments(rule),
     "let sum = 0;",
     ...sums.map((name) => `let ${name} = 0;`),
-    ...program.before,
+    ...program.preamble,
     `for (let i = 0, at = 0; i < periods.length; i++, at += ${rule.states}) {`,
     "const t = periods[i];",
     lines(rule.states, (k) => `const s${k} = from[at + ${k}];`),
-    ...program.inside,
+    ...program.body,
     ...rule.next.map((_, slot) => gatherSource(rule, program, slot, logarithmic)),
     "}",
     ...sums.map((name, i) => `sums[${i}] = ${name};`),
@@ -33,7 +33,7 @@ export function stepSumsSource(rule: RuleGraph, logarithmic: boolean): string {
 
 /** Adds one slot of the present pair to the sums; a weight of 0 leaves it out. */
 function gatherSource(rule: RuleGraph, program: EmittedProgram, slot: number, logarithmic: boolean): string {
-  const slopes = stepDerivatives(rule).byParameter[slot]!.map((node, a) => ({
+  const slopes = stepJacobian(rule).byParameter[slot]!.map((node, a) => ({
     a,
     source: program.read(node),
   }));

@@ -4,8 +4,8 @@ import { lines, readArguments } from "./source-parts.js";
 
 /**
  * Body of `pathSums(initial, parameters, inputs, from, periods, observed, weights, sums)`: the path, its
- * sensitivities and the sums of a least-squares fit in one pass. Nothing but the sums leaves the loop, so that the
- * sums of one period are worked out while the next period's state is still on its way.
+ * sensitivities and the sums of a least-squares fit in one pass. Only the sums leave the loop, so the processor can
+ * add up one period while it computes the next.
  *
  * @param logarithmic - compares log x with what is observed, instead of x.
  */
@@ -24,9 +24,9 @@ export function sumsSource(rule: RuleGraph, logarithmic: boolean): string {
     ...declared,
     "let at = 0;",
     ...gather,
-    ...program.before,
+    ...program.preamble,
     `for (let i = 1, t = from; i <= periods; i++, t++) {`,
-    ...program.inside,
+    ...program.body,
     lines(rule.states, (i) => `const n${i} = ${program.read(rule.next[i]!)};`),
     ...next,
     lines(rule.states, (i) => `s${i} = n${i};`),

@@ -1,7 +1,7 @@
 import type { Graph } from "./graph.js";
 import type { Node } from "./node.js";
 
-/** Sums and products for derivatives, where a factor that is exactly zero makes its product vanish. */
+/** Sums and products for derivatives, where a factor of exactly zero makes the product zero. */
 export interface DerivativeArithmetic {
   readonly graph: Graph;
   readonly zero: Node;
@@ -9,7 +9,7 @@ export interface DerivativeArithmetic {
   readonly subtract: (a: Node, b: Node) => Node;
   readonly multiply: (a: Node, b: Node) => Node;
   readonly negate: (a: Node) => Node;
-  /** 1/a, shared by everything that divides by a. */
+  /** 1/a, shared by all divisions by a. */
   readonly reciprocal: (a: Node) => Node;
 }
 

@@ -17,7 +17,7 @@ export function derivativeBy(graph: Graph, leaf: Node): (node: Node) => Node {
     if (node.kind !== "inner") return zero;
     let derivative = known.get(node);
     if (derivative === undefined) {
-      const inside = node.inside.map(of);
+      const inside = node.args.map(of);
       derivative = inside.every((d) => d === zero) ? zero : innerDerivative(arithmetic, node, inside);
       known.set(node, derivative);
     }

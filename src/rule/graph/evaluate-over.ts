@@ -1,7 +1,7 @@
 import { graphOrder } from "./graph-order.js";
 import type { Node, Operator } from "./node.js";
 
-/** Another kind of number to work a graph out in: exact fractions, intervals. */
+/** A number system in which a graph can be evaluated: exact fractions, intervals. */
 export interface Algebra<T> {
   readonly number: (value: number) => T;
   readonly operations: Readonly<Record<Operator, (a: T, b: T, c: T) => T>>;
@@ -9,7 +9,7 @@ export interface Algebra<T> {
 
 type Leaf = Extract<Node, { kind: "leaf" }>;
 
-/** Works nodes out in another algebra; `leafValue` gives what a leaf stands for. */
+/** Evaluates nodes in another algebra; `leafValue` gives the value of a leaf. */
 export function evaluatorOver<T>(
   roots: readonly Node[],
   algebra: Algebra<T>,
@@ -17,7 +17,7 @@ export function evaluatorOver<T>(
   const ordered = graphOrder(roots);
   const place = new Map(ordered.map((node, index) => [node, index]));
   const insides = ordered.map((node) =>
-    node.kind === "inner" ? node.inside.map((part) => place.get(part)!) : [],
+    node.kind === "inner" ? node.args.map((part) => place.get(part)!) : [],
   );
   const tape: T[] = new Array(ordered.length);
   return (leafValue) => {

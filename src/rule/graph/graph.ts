@@ -1,11 +1,11 @@
 import type { LeafRole, Node, Operator } from "./node.js";
 import { operations } from "./operations.js";
 
-/** Makes nodes, each once: asking again for an equal expression gives the same node. */
+/** Hash-consed nodes: an equal expression gives the same node. */
 export interface Graph {
   readonly number: (value: number) => Node;
   readonly leaf: (role: LeafRole, slot: number, offset?: number) => Node;
-  /** Folds numbers and drops what changes no value: x*1, x/1, x+0, x-0, x^1, -(-x). */
+  /** Folds constants and drops operations without effect: x*1, x/1, x+0, x-0, x^1, -(-x). */
   readonly apply: (operator: Operator, ...inside: readonly Node[]) => Node;
   readonly size: () => number;
 }
@@ -15,8 +15,8 @@ const commutative: ReadonlySet<Operator> = new Set(["add", "multiply", "min", "m
 const isNumber = (node: Node | undefined, value: number): boolean =>
   node?.kind === "number" && node.value === value;
 
-/** The number that leaves the other argument as it is. */
-const rightUnits: Partial<Readonly<Record<Operator, number>>> = {
+/** The right identity element of an operator. */
+const identityElements: Partial<Readonly<Record<Operator, number>>> = {
   add: 0,
   subtract: 0,
   multiply: 1,
@@ -24,27 +24,27 @@ const rightUnits: Partial<Readonly<Record<Operator, number>>> = {
   power: 1,
 };
 
-/** The argument that the result is equal to in value, if there is one. */
-function alreadyMade(operator: Operator, a: Node, b: Node | undefined): Node | undefined {
-  if (operator === "negate") return a.kind === "inner" && a.operator === "negate" ? a.inside[0] : undefined;
-  const unit = rightUnits[operator];
+/** The argument that equals the result, if one does. */
+function simplified(operator: Operator, a: Node, b: Node | undefined): Node | undefined {
+  if (operator === "negate") return a.kind === "inner" && a.operator === "negate" ? a.args[0] : undefined;
+  const unit = identityElements[operator];
   if (unit === undefined) return undefined;
   if (isNumber(b, unit)) return a;
   return commutative.has(operator) && isNumber(a, unit) ? b : undefined;
 }
 
 export function createGraph(): Graph {
-  const made = new Map<string, Node>();
-  const once = (key: string, make: (id: number) => Node): Node => {
-    let node = made.get(key);
+  const interned = new Map<string, Node>();
+  const intern = (key: string, make: (id: number) => Node): Node => {
+    let node = interned.get(key);
     if (node === undefined) {
-      node = make(made.size);
-      made.set(key, node);
+      node = make(interned.size);
+      interned.set(key, node);
     }
     return node;
   };
   const number = (value: number): Node =>
-    once(`#${Object.is(value, -0) ? "-0" : value}`, (id) => ({ kind: "number", id, value }));
+    intern(`#${Object.is(value, -0) ? "-0" : value}`, (id) => ({ kind: "number", id, value }));
   const apply = (operator: Operator, ...given: readonly Node[]): Node => {
     const [a, b, c] = given;
     if (given.every((node) => node.kind === "number")) {
@@ -52,17 +52,17 @@ export function createGraph(): Graph {
       return number(operations[operator].value(x, y, z));
     }
     if (operator === "choose" && a!.kind === "number") return a!.value === 1 ? b! : c!;
-    const same = alreadyMade(operator, a!, b);
+    const same = simplified(operator, a!, b);
     if (same !== undefined) return same;
     const inside = commutative.has(operator) ? [...given].sort((p, q) => p.id - q.id) : given;
     const key = `${operator}(${inside.map((node) => node.id).join()})`;
-    return once(key, (id) => ({ kind: "inner", id, operator, inside }));
+    return intern(key, (id) => ({ kind: "inner", id, operator, args: inside }));
   };
   return {
     number,
     leaf: (role, slot, offset = 0) =>
-      once(`${role}[${slot}]${offset}`, (id) => ({ kind: "leaf", id, role, slot, offset })),
+      intern(`${role}[${slot}]${offset}`, (id) => ({ kind: "leaf", id, role, slot, offset })),
     apply,
-    size: () => made.size,
+    size: () => interned.size,
   };
 }

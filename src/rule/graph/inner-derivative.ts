@@ -3,10 +3,10 @@ import type { Node, Operator } from "./node.js";
 import { powerOf } from "./power.js";
 
 type Inner = Extract<Node, { kind: "inner" }>;
-/** Gives the derivative of `node` from those of its arguments. */
+/** The derivative of `node` from those of its arguments (chain rule). */
 type Derivative = (use: DerivativeArithmetic, node: Inner, a: Node, b: Node, c: Node) => Node;
 
-/** Derivative of one branch or the other, never a mixture: a branch not taken may be infinite. */
+/** Derivative of the branch taken, never a weighted sum: the other branch may be infinite. */
 const branch = (use: DerivativeArithmetic, condition: Node, a: Node, b: Node): Node =>
   a === b ? a : use.graph.apply("choose", condition, a, b);
 
@@ -14,7 +14,7 @@ const none: Derivative = (use) => use.zero;
 
 const power: Derivative = (use, node, da, db) => {
   const { graph } = use;
-  const [base, exponent] = node.inside as [Node, Node];
+  const [base, exponent] = node.args as [Node, Node];
   const lowered = powerOf(graph, base, graph.apply("subtract", exponent, graph.number(1)));
   const byBase = use.multiply(use.multiply(exponent, lowered), da);
   if (db === use.zero) return byBase;
@@ -27,9 +27,9 @@ const power: Derivative = (use, node, da, db) => {
 const derivatives: Readonly<Record<Operator, Derivative>> = {
   add: (use, _, a, b) => use.add(a, b),
   subtract: (use, _, a, b) => use.subtract(a, b),
-  multiply: (use, node, a, b) => use.add(use.multiply(a, node.inside[1]!), use.multiply(node.inside[0]!, b)),
+  multiply: (use, node, a, b) => use.add(use.multiply(a, node.args[1]!), use.multiply(node.args[0]!, b)),
   divide: (use, node, a, b) =>
-    use.multiply(use.subtract(a, use.multiply(node, b)), use.reciprocal(node.inside[1]!)),
+    use.multiply(use.subtract(a, use.multiply(node, b)), use.reciprocal(node.args[1]!)),
   power,
   negate: (use, _, a) => use.negate(a),
   less: none,
@@ -38,30 +38,29 @@ const derivatives: Readonly<Record<Operator, Derivative>> = {
   and: none,
   or: none,
   not: none,
-  choose: (use, node, _, b, c) => branch(use, node.inside[0]!, b, c),
+  choose: (use, node, _, b, c) => branch(use, node.args[0]!, b, c),
   exp: (use, node, a) => use.multiply(node, a),
-  log: (use, node, a) => use.multiply(a, use.reciprocal(node.inside[0]!)),
+  log: (use, node, a) => use.multiply(a, use.reciprocal(node.args[0]!)),
   log10: (use, node, a) =>
-    use.multiply(a, use.reciprocal(use.multiply(node.inside[0]!, use.graph.number(Math.LN10)))),
+    use.multiply(a, use.reciprocal(use.multiply(node.args[0]!, use.graph.number(Math.LN10)))),
   sqrt: (use, node, a) => use.multiply(a, use.reciprocal(use.multiply(use.graph.number(2), node))),
-  abs: (use, node, a) => branch(use, use.graph.apply("less", node.inside[0]!, use.zero), use.negate(a), a),
+  abs: (use, node, a) => branch(use, use.graph.apply("less", node.args[0]!, use.zero), use.negate(a), a),
   sign: none,
-  min: (use, node, a, b) =>
-    branch(use, use.graph.apply("lessOrEqual", node.inside[0]!, node.inside[1]!), a, b),
-  max: (use, node, a, b) => branch(use, use.graph.apply("less", node.inside[0]!, node.inside[1]!), b, a),
+  min: (use, node, a, b) => branch(use, use.graph.apply("lessOrEqual", node.args[0]!, node.args[1]!), a, b),
+  max: (use, node, a, b) => branch(use, use.graph.apply("less", node.args[0]!, node.args[1]!), b, a),
   floor: none,
   ceil: none,
   round: none,
   mod: (use, node, a, b) => {
-    const [x, divisor] = node.inside as [Node, Node];
+    const [x, divisor] = node.args as [Node, Node];
     const whole = use.graph.apply("floor", use.graph.apply("divide", x, divisor));
     return use.subtract(a, use.multiply(whole, b));
   },
-  sin: (use, node, a) => use.multiply(use.graph.apply("cos", node.inside[0]!), a),
-  cos: (use, node, a) => use.negate(use.multiply(use.graph.apply("sin", node.inside[0]!), a)),
+  sin: (use, node, a) => use.multiply(use.graph.apply("cos", node.args[0]!), a),
+  cos: (use, node, a) => use.negate(use.multiply(use.graph.apply("sin", node.args[0]!), a)),
   tan: (use, node, a) => use.multiply(use.add(use.graph.number(1), use.multiply(node, node)), a),
   asin: (use, node, a) => {
-    const square = use.multiply(node.inside[0]!, node.inside[0]!);
+    const square = use.multiply(node.args[0]!, node.args[0]!);
     const root = use.graph.apply("sqrt", use.subtract(use.graph.number(1), square));
     return use.multiply(a, use.reciprocal(root));
   },

@@ -1,11 +1,11 @@
-/** All numbers from low to high; NaN in both when an operation has no value anywhere in it. */
+/** All numbers from low to high; NaN in both when an operation is undefined on the whole interval. */
 export type Interval = readonly [low: number, high: number];
 
-export const nowhere: Interval = [Number.NaN, Number.NaN];
-export const everywhere: Interval = [Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY];
+export const emptyInterval: Interval = [Number.NaN, Number.NaN];
+export const wholeLine: Interval = [Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY];
 
-/** Widens by a few units in the last place, so that rounding never loses a value. */
-export const outward = (low: number, high: number): Interval => [
+/** Outward rounding: widens by a few units in the last place, so that no value is lost. */
+export const roundOutward = (low: number, high: number): Interval => [
   Number.isFinite(low) ? low - Math.abs(low) * 4 * Number.EPSILON - Number.MIN_VALUE : low,
   Number.isFinite(high) ? high + Math.abs(high) * 4 * Number.EPSILON + Number.MIN_VALUE : high,
 ];
@@ -15,11 +15,11 @@ const product = (a: number, b: number): number => (a === 0 || b === 0 ? 0 : a * 
 
 export function times([a, b]: Interval, [c, d]: Interval): Interval {
   const all = [product(a, c), product(a, d), product(b, c), product(b, d)];
-  return outward(Math.min(...all), Math.max(...all));
+  return roundOutward(Math.min(...all), Math.max(...all));
 }
 
-export function over(above: Interval, [c, d]: Interval): Interval {
-  if ((c < 0 && d > 0) || (c === 0 && d === 0)) return everywhere;
+export function dividedBy(above: Interval, [c, d]: Interval): Interval {
+  if ((c < 0 && d > 0) || (c === 0 && d === 0)) return wholeLine;
   const ends: Interval = [
     d === 0 ? Number.NEGATIVE_INFINITY : 1 / d,
     c === 0 ? Number.POSITIVE_INFINITY : 1 / c,
@@ -27,10 +27,10 @@ export function over(above: Interval, [c, d]: Interval): Interval {
   return times(above, ends);
 }
 
-/** An infinite end less an infinite end may be anything; no value at all stays none. */
+/** Infinity minus infinity may be anything; an empty interval stays empty. */
 const settled = (low: number, high: number, none: boolean): Interval => {
-  if (none) return nowhere;
-  return outward(
+  if (none) return emptyInterval;
+  return roundOutward(
     Number.isNaN(low) ? Number.NEGATIVE_INFINITY : low,
     Number.isNaN(high) ? Number.POSITIVE_INFINITY : high,
   );
@@ -46,5 +46,6 @@ export const hull = ([a, b]: Interval, [c, d]: Interval): Interval => {
 };
 export const contains = ([low, high]: Interval, value: number): boolean => low <= value && value <= high;
 
-/** Image under a function that never falls. */
-export const rising = (of: (x: number) => number, [a, b]: Interval): Interval => outward(of(a), of(b));
+/** Image under a nondecreasing function. */
+export const increasing = (of: (x: number) => number, [a, b]: Interval): Interval =>
+  roundOutward(of(a), of(b));

@@ -1,4 +1,4 @@
-/** What an inner node of the graph does with its arguments. */
+/** The operation of an inner node. */
 export type Operator =
   | "add"
   | "subtract"
@@ -35,7 +35,7 @@ export type LeafRole = "state" | "parameter" | "input" | "period";
 
 /**
  * A node of an expression graph. Equal expressions are one node (hash-consed), so identity is equality.
- * `id` grows with the order of making, hence arguments have smaller ids than what is made of them.
+ * `id` grows in the order of creation, so arguments have smaller ids than the nodes that use them.
  */
 export type Node =
   | { readonly kind: "number"; readonly id: number; readonly value: number }
@@ -50,5 +50,5 @@ export type Node =
       readonly kind: "inner";
       readonly id: number;
       readonly operator: Operator;
-      readonly inside: readonly Node[];
+      readonly args: readonly Node[];
     };

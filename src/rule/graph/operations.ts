@@ -8,7 +8,7 @@ interface Operation {
 
 /**
  * Rounds to decimal digits, halves away from zero. A value within two units of its last binary place of a half
- * counts as a half, because most decimal halves have no exact binary form.
+ * is treated as a half, because most decimal halves have no exact binary form.
  */
 export function roundTo(x: number, digits: number): number {
   const scale = 10 ** digits;
@@ -20,7 +20,7 @@ export function roundTo(x: number, digits: number): number {
 /** Remainder with the sign of the divisor, so that mod(t, 12) counts months for negative t too. */
 export const modulo = (x: number, divisor: number): number => x - divisor * Math.floor(x / divisor);
 
-const yes = (holds: boolean): number => (holds ? 1 : 0);
+const truth = (holds: boolean): number => (holds ? 1 : 0);
 const call =
   (name: string) =>
   (a: string): string =>
@@ -42,11 +42,11 @@ export const operations: Readonly<Record<Operator, Operation>> = {
   divide: { value: (a, b) => a / b, code: join("/") },
   power: { value: (a, b) => a ** b, code: call2("Math.pow") },
   negate: { value: (a) => -a, code: (a) => `(-${a})` },
-  less: { value: (a, b) => yes(a < b), code: join("<") },
-  lessOrEqual: { value: (a, b) => yes(a <= b), code: join("<=") },
-  equal: { value: (a, b) => yes(a === b), code: join("===") },
-  and: { value: (a, b) => yes(a === 1 && b === 1), code: join("&&") },
-  or: { value: (a, b) => yes(a === 1 || b === 1), code: join("||") },
+  less: { value: (a, b) => truth(a < b), code: join("<") },
+  lessOrEqual: { value: (a, b) => truth(a <= b), code: join("<=") },
+  equal: { value: (a, b) => truth(a === b), code: join("===") },
+  and: { value: (a, b) => truth(a === 1 && b === 1), code: join("&&") },
+  or: { value: (a, b) => truth(a === 1 || b === 1), code: join("||") },
   not: { value: (a) => 1 - a, code: (a) => `(!${a})` },
   choose: { value: (a, b, c) => (a === 1 ? b : c), code: (a, b, c) => `(${a} ? ${b} : ${c})` },
   exp: { value: Math.exp, code: call("exp") },

@@ -1,7 +1,7 @@
 import type { Graph } from "./graph.js";
 import type { Node } from "./node.js";
 
-/** Small whole powers become products and a half becomes a root: same value to a rounding, many times faster. */
+/** Small integer powers become products and a half becomes a root: equal up to rounding, many times faster. */
 export function powerOf(graph: Graph, base: Node, exponent: Node): Node {
   if (exponent.kind === "number") {
     if (exponent.value === 2) return graph.apply("multiply", base, base);

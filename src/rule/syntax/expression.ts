@@ -16,7 +16,7 @@ export type BinaryOperator =
   | "and"
   | "or";
 
-/** What stands to the right of `=`, with its place in the text. */
+/** Syntax tree of an expression, with positions in the text. */
 export type Expression =
   | (Span & { readonly kind: "number"; readonly value: number })
   /** `X` and `X[t]` have offset 0, `X[t-2]` has -2, `X[t+1]` has 1. */
@@ -28,9 +28,9 @@ export type Expression =
       readonly left: Expression;
       readonly right: Expression;
     })
-  | (Span & { readonly kind: "call"; readonly name: string; readonly inside: readonly Expression[] });
+  | (Span & { readonly kind: "call"; readonly name: string; readonly args: readonly Expression[] });
 
-/** One line of a rule: the next value of a state, its change, or a named quantity inside the period. */
+/** One line of a rule: the next value of a state, its change, or a quantity within the period. */
 export interface Statement extends Span {
   readonly kind: "next" | "change" | "quantity";
   readonly name: string;

@@ -1,64 +1,68 @@
-import { impliedProduct, refuse } from "../refusals.js";
+import { missingOperatorError, ruleError } from "../errors.js";
 import type { BinaryOperator, Expression } from "./expression.js";
 import { parseOperand } from "./parse-operand.js";
-import { comparisonStrength, joiningStrength } from "./strengths.js";
+import { binaryPrecedence, comparisonPrecedence } from "./precedence.js";
 import type { Token } from "./token.js";
-import { before, type TokenReader } from "./token-reader.js";
+import { placeBefore, type TokenReader } from "./token-reader.js";
 
-function refuseChain(reader: TokenReader, operator: Token): void {
+function rejectChainedComparison(reader: TokenReader, operator: Token): void {
   if (
-    joiningStrength(reader.peek()) !== comparisonStrength ||
-    joiningStrength(operator) !== comparisonStrength
+    binaryPrecedence(reader.peek()) !== comparisonPrecedence ||
+    binaryPrecedence(operator) !== comparisonPrecedence
   )
     return;
-  throw refuse(
+  throw ruleError(
     "chained-comparison",
     reader.text,
     reader.peek(),
-    "A comparison joins two values, and this is a third.",
+    "Comparisons cannot be chained.",
     "Join two comparisons with and, as in 0 < N and N < K.",
   );
 }
 
-/** Refuses what can only be a product or a stray sign after a complete value. */
-function refuseImpliedProduct(reader: TokenReader, left: Expression): void {
+/** Rejects what can only be a product without its sign, or a stray symbol, after a complete value. */
+function rejectImpliedProduct(reader: TokenReader, left: Expression): void {
   const next = reader.peek();
   const opens = next.kind === "sign" && (next.text === "(" || next.text === "Δ");
   if (next.kind !== "name" && next.kind !== "number" && !opens) return;
-  if (joiningStrength(next) > 0) return;
+  if (binaryPrecedence(next) > 0) return;
   if (next.kind === "name" && next.text === "not") return;
   const last = reader.text.slice(left.start, left.end);
   const right = next.text === "(" ? "( ... )" : next.text;
-  throw impliedProduct(reader.text, { start: left.end, end: next.end }, last.slice(-30), right);
+  throw missingOperatorError(reader.text, { start: left.end, end: next.end }, last.slice(-30), right);
 }
 
-/** Reads one expression whose joining signs all bind at least as closely as `least`. */
-export function parseExpression(reader: TokenReader, least = 1): Expression {
+/** Reads one expression whose operators all bind at least as tightly as `least`. */
+export function parseExpression(reader: TokenReader, minPrecedence = 1): Expression {
   return reader.nested(() => {
     let left = parseOperand(reader, parseExpression);
-    refuseImpliedProduct(reader, left);
-    for (let operator = reader.peek(); joiningStrength(operator) >= least; operator = reader.peek()) {
+    rejectImpliedProduct(reader, left);
+    for (
+      let operator = reader.peek();
+      binaryPrecedence(operator) >= minPrecedence;
+      operator = reader.peek()
+    ) {
       left = parseRest(reader, left);
-      refuseChain(reader, operator);
+      rejectChainedComparison(reader, operator);
     }
     return left;
   });
 }
 
-/** Reads a joining sign and what stands to its right. `^` groups to the right, all others to the left. */
+/** Reads a binary operator and its right operand. `^` groups to the right, all others to the left. */
 function parseRest(reader: TokenReader, left: Expression): Expression {
   const operator = reader.take();
-  const strength = joiningStrength(operator);
+  const own = binaryPrecedence(operator);
   if (reader.peek().kind === "newline" || reader.peek().kind === "end") {
-    throw refuse(
+    throw ruleError(
       "missing-value",
       reader.text,
       operator,
-      `A value is missing after "${operator.text}", ${before(reader.peek())}.`,
-      "Write the value, or take the sign away.",
+      `A value is missing after "${operator.text}", ${placeBefore(reader.peek())}.`,
+      "Add the value, or remove the operator.",
     );
   }
-  const right = parseExpression(reader, operator.text === "^" ? strength : strength + 1);
+  const right = parseExpression(reader, operator.text === "^" ? own : own + 1);
   reader.count(operator);
   return {
     kind: "binary",

@@ -1,15 +1,16 @@
-import { ruleFunction, ruleFunctions } from "../functions.js";
-import { notAFunction, refuse } from "../refusals.js";
+import { misplacedChangeRemedy, ruleError, unknownFunctionError } from "../errors.js";
+import { ruleFunction } from "../functions.js";
 import type { Expression } from "./expression.js";
+import { callRemedy } from "./other-notations.js";
 import { parseOffset } from "./parse-offset.js";
-import { notStrength, unaryMinusStrength } from "./strengths.js";
+import { notPrecedence, unaryMinusPrecedence } from "./precedence.js";
 import type { Token } from "./token.js";
-import { before, type TokenReader } from "./token-reader.js";
+import { placeBefore, type TokenReader } from "./token-reader.js";
 
-/** How a nested expression is read; handed in, because an expression is made of operands. */
+/** Reads a nested expression; passed in, because expressions and operands contain each other. */
 type ReadExpression = (reader: TokenReader, least?: number) => Expression;
 
-/** Reads a value with the signs in front of it: a number, a name, a call, a group, or -x, not x. */
+/** Reads an operand: a number, a name, a call, a group, or -x, not x. */
 export function parseOperand(reader: TokenReader, read: ReadExpression): Expression {
   const token = reader.peek();
   reader.count(token);
@@ -17,45 +18,45 @@ export function parseOperand(reader: TokenReader, read: ReadExpression): Express
   if (token.kind === "name") return token.text === "not" ? parseUnary(reader, read) : parseName(reader, read);
   if (token.text === "-") return parseUnary(reader, read);
   if (token.text === "(") return parseGroup(reader, read);
-  throw missingValue(reader, token);
+  throw missingValueError(reader, token);
 }
 
-function missingValue(reader: TokenReader, token: Token): Error {
+function missingValueError(reader: TokenReader, token: Token): Error {
   if (token.text === "Δ") {
-    return refuse(
+    return ruleError(
       "misplaced-change",
       reader.text,
       token,
-      "The change sign stands inside an expression.",
-      "A change may only begin a line, as in ΔN = r*N. Use N - N[t-1] for the last change.",
+      "Δ can only start a line.",
+      misplacedChangeRemedy,
     );
   }
   const remedy =
     token.text === "+"
-      ? "A value needs no plus sign in front."
+      ? "Remove the plus sign."
       : token.text === "="
-        ? "Write == to compare."
-        : "Write a number, a name, a function or a bracket there.";
-  return refuse("missing-value", reader.text, token, `A value is missing ${before(token)}.`, remedy);
+        ? "To compare, write ==."
+        : "Write a number, a name, a function or a bracket here.";
+  return ruleError("missing-value", reader.text, token, `A value is missing ${placeBefore(token)}.`, remedy);
 }
 
 function parseNumber(reader: TokenReader): Expression {
   const { text, start, end } = reader.take();
   const value = Number(text);
   if (Number.isFinite(value)) return { kind: "number", value, start, end };
-  throw refuse(
+  throw ruleError(
     "number-too-large",
     reader.text,
     { start, end },
-    `The number ${text} is too large for a computer number.`,
-    "Use a larger unit.",
+    `The number ${text} is too large.`,
+    "Use a larger unit, so that the numbers become smaller.",
   );
 }
 
 function parseUnary(reader: TokenReader, read: ReadExpression): Expression {
   const sign = reader.take();
   const operator = sign.text === "not" ? "not" : "-";
-  const operand = read(reader, operator === "not" ? notStrength : unaryMinusStrength);
+  const operand = read(reader, operator === "not" ? notPrecedence : unaryMinusPrecedence);
   return { kind: "unary", operator, operand, start: sign.start, end: operand.end };
 }
 
@@ -64,7 +65,7 @@ function parseGroup(reader: TokenReader, read: ReadExpression): Expression {
   skipNewlines(reader);
   const inside = read(reader);
   skipNewlines(reader);
-  const close = reader.expect(")", "Close the bracket that was opened, or take the opening one away.");
+  const close = reader.expect(")", "Close the bracket, or remove the opening one.");
   return { ...inside, start: open.start, end: close.end };
 }
 
@@ -77,21 +78,21 @@ function parseName(reader: TokenReader, read: ReadExpression): Expression {
   const name = reader.take();
   if (reader.peek().text === "(" && reader.peek().kind === "sign") return parseCall(reader, read, name);
   if (name.text === "and" || name.text === "or") {
-    throw refuse(
+    throw ruleError(
       "missing-value",
       reader.text,
       name,
       `A value is missing before "${name.text}".`,
-      `Write a condition on both sides, as in N > 0 ${name.text} N < K.`,
+      `Write a condition on both sides of ${name.text}, as in N > 0 ${name.text} N < K.`,
     );
   }
   const found = ruleFunction(name.text);
   if (found !== undefined) {
-    throw refuse(
+    throw ruleError(
       "function-without-brackets",
       reader.text,
       name,
-      `"${name.text}" is a function and stands without brackets.`,
+      `"${name.text}" is a function and needs brackets.`,
       `Write ${found.usage}, or choose another name.`,
     );
   }
@@ -103,12 +104,7 @@ function parseCall(reader: TokenReader, read: ReadExpression, name: Token): Expr
   const open = reader.take();
   if (ruleFunction(name.text) === undefined) {
     const place = { start: name.start, end: open.end };
-    throw notAFunction(
-      reader.text,
-      place,
-      name.text,
-      ruleFunctions.map((one) => one.name),
-    );
+    throw unknownFunctionError(reader.text, place, name.text, callRemedy(reader.text, place.end, name.text));
   }
   const inside: Expression[] = [];
   skipNewlines(reader);
@@ -121,5 +117,5 @@ function parseCall(reader: TokenReader, read: ReadExpression, name: Token): Expr
     reader.expect(")", `Close the bracket of ${name.text}( after its last value.`);
   }
   const end = reader.peek(-1).end;
-  return { kind: "call", name: name.text, inside, start: name.start, end };
+  return { kind: "call", name: name.text, args: inside, start: name.start, end };
 }

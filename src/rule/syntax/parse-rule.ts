@@ -1,13 +1,15 @@
+import { ruleError } from "../errors.js";
 import { reservedWords } from "../functions.js";
-import { refuse } from "../refusals.js";
 import type { Statement } from "./expression.js";
+import { lineRemedy } from "./other-notations.js";
 import { parseExpression } from "./parse-expression.js";
 import { parseOffset } from "./parse-offset.js";
-import { joiningStrength } from "./strengths.js";
+import { binaryPrecedence } from "./precedence.js";
 import type { Token } from "./token.js";
 import { type TokenReader, tokenReader } from "./token-reader.js";
 
-const forms = "A line sets a next value, N[t+1] = ..., a change, ΔN = ..., or a named quantity, paid = ...";
+const forms =
+  "Each line sets the next value of a state (N[t+1] = ...), its change (ΔN = ...) or a quantity within the period (paid = ...).";
 
 type Target = Pick<Statement, "kind" | "name" | "nameAt">;
 
@@ -16,9 +18,9 @@ function takeName(reader: TokenReader): Token {
   if (name.kind === "name" && !reservedWords.has(name.text)) return name;
   const wrong =
     name.kind === "name"
-      ? `"${name.text}" has a meaning of its own and cannot be set.`
-      : "A line must begin with the name of what it sets.";
-  throw refuse("unreadable-line", reader.text, name, wrong, forms);
+      ? `"${name.text}" is a reserved word and cannot be set.`
+      : "A line must start with the name it sets.";
+  throw ruleError("unreadable-line", reader.text, name, wrong, forms);
 }
 
 function parseTarget(reader: TokenReader): Target {
@@ -30,7 +32,7 @@ function parseTarget(reader: TokenReader): Target {
     reader.take();
     reader.take();
     const name = takeName(reader);
-    reader.expect(")", "Write the change of one state, as in change(N) = r*N.");
+    reader.expect(")", "Write the name of one state, as in change(N) = r*N.");
     return { kind: "change", name: name.text, nameAt: name };
   }
   const name = takeName(reader);
@@ -38,16 +40,23 @@ function parseTarget(reader: TokenReader): Target {
   const { offset, end } = parseOffset(reader, name);
   if (bracket.text !== "[") return { kind: "quantity", name: name.text, nameAt: name };
   if (offset === 1) return { kind: "next", name: name.text, nameAt: { start: name.start, end } };
-  const wrong = `A line can set the next value of "${name.text}" only, at [t+1].`;
-  throw refuse("unreadable-line", reader.text, { start: name.start, end }, wrong, forms);
+  const wrong = `A line can only set the next value of "${name.text}".`;
+  throw ruleError(
+    "unreadable-line",
+    reader.text,
+    { start: name.start, end },
+    wrong,
+    `Write ${name.text}[t+1] = ...`,
+  );
 }
 
 function expectEquals(reader: TokenReader, from: Token): void {
   if (reader.accept("=")) return;
   const found = reader.peek();
-  const joins = joiningStrength(found) > 0 || found.kind === "newline" || found.kind === "end";
+  const joins = binaryPrecedence(found) > 0 || found.kind === "newline" || found.kind === "end";
   const place = joins ? { start: from.start, end: Math.max(from.end, found.start) } : found;
-  throw refuse("unreadable-line", reader.text, place, "The line does not say what it sets.", forms);
+  const remedy = lineRemedy(reader.text, from.start) ?? forms;
+  throw ruleError("unreadable-line", reader.text, place, "This line does not set anything.", remedy);
 }
 
 function parseStatement(reader: TokenReader): Statement {
@@ -59,11 +68,11 @@ function parseStatement(reader: TokenReader): Statement {
   if (after.kind !== "newline" && after.kind !== "end") {
     const remedy =
       after.text === "="
-        ? "Write == to compare, and begin a new line for another quantity."
+        ? "To compare, write ==. To set another quantity, start a new line."
         : after.text === ","
-          ? "Write decimals with a point, as in 0.5."
-          : "Take it away, or open a bracket for it.";
-    throw refuse("stray-sign", reader.text, after, `The sign "${after.text}" joins nothing here.`, remedy);
+          ? "Use a decimal point, as in 0.5."
+          : "Remove it, or add the opening bracket.";
+    throw ruleError("stray-sign", reader.text, after, `"${after.text}" is not expected here.`, remedy);
   }
   return { ...target, expression, start: first.start, end: expression.end };
 }
@@ -78,5 +87,5 @@ export function parseRule(text: string): readonly Statement[] {
     statements.push(parseStatement(reader));
   }
   if (statements.length > 0) return statements;
-  throw refuse("empty-rule", text, reader.peek(), "The rule has no line.", forms);
+  throw ruleError("empty-rule", text, reader.peek(), "The rule is empty.", forms);
 }

@@ -1,31 +1,31 @@
-import { refuse, tooLong } from "../refusals.js";
+import { ruleError, tooLargeError } from "../errors.js";
 import { readTokens } from "./read-tokens.js";
 import type { Span, Token } from "./token.js";
 
-/** Limits that keep a hostile or runaway text from taking time or stack. */
+/** Limits that protect time and stack against hostile or runaway texts. */
 export const limits: { readonly letters: number; readonly depth: number; readonly nodes: number } = {
   letters: 20_000,
   depth: 100,
   nodes: 5_000,
 };
 
-/** The tokens of one rule with a current position, and counts held to the limits. */
+/** The tokens of one rule with a current position; counts are checked against the limits. */
 export interface TokenReader {
   readonly text: string;
   readonly peek: (ahead?: number) => Token;
   readonly take: () => Token;
-  /** Takes the sign if it comes next. */
+  /** Takes the symbol if it comes next. */
   readonly accept: (sign: string) => boolean;
   readonly expect: (sign: string, remedy: string) => Token;
-  /** Counts one more part of the rule, at the place. */
+  /** Counts one more term or operator, at the place. */
   readonly count: (place: Span) => void;
-  /** Runs the reading of a nested part, refused when nested too deeply. */
+  /** Reads a nested part; throws when nested too deeply. */
   readonly nested: <T>(read: () => T) => T;
 }
 
 function limitedTokens(text: string): readonly Token[] {
   if (text.length > limits.letters) {
-    throw tooLong("letters", limits.letters, text.length, text, {
+    throw tooLargeError("characters", limits.letters, text.length, text, {
       start: limits.letters,
       end: limits.letters + 1,
     });
@@ -44,24 +44,24 @@ export function tokenReader(text: string): TokenReader {
     position++;
     return token;
   };
-  const comesNext = (sign: string): boolean => peek().kind === "sign" && peek().text === sign;
+  const isNext = (sign: string): boolean => peek().kind === "sign" && peek().text === sign;
   return {
     text,
     peek,
     take,
-    accept: (sign) => comesNext(sign) && take() !== undefined,
+    accept: (sign) => isNext(sign) && take() !== undefined,
     expect: (sign, remedy) => {
-      if (comesNext(sign)) return take();
+      if (isNext(sign)) return take();
       const found = peek();
-      throw refuse("missing-sign", text, found, `A "${sign}" is missing ${before(found)}.`, remedy);
+      throw ruleError("missing-sign", text, found, `"${sign}" is missing ${placeBefore(found)}.`, remedy);
     },
     count: (place) => {
       nodes++;
-      if (nodes > limits.nodes) throw tooLong("parts", limits.nodes, nodes, text, place);
+      if (nodes > limits.nodes) throw tooLargeError("terms and operators", limits.nodes, nodes, text, place);
     },
     nested: (read) => {
       depth++;
-      if (depth > limits.depth) throw tooLong("levels of nesting", limits.depth, depth, text, peek());
+      if (depth > limits.depth) throw tooLargeError("levels of nesting", limits.depth, depth, text, peek());
       const result = read();
       depth--;
       return result;
@@ -69,8 +69,8 @@ export function tokenReader(text: string): TokenReader {
   };
 }
 
-/** How a message names the place in front of a token. */
-export function before(token: Token): string {
+/** How a message names the position in front of a token. */
+export function placeBefore(token: Token): string {
   if (token.kind === "end") return "at the end of the rule";
   if (token.kind === "newline") return "at the end of the line";
   return `before "${token.text}"`;

@@ -4,7 +4,7 @@ export interface Span {
   readonly end: number;
 }
 
-/** One word, number or sign of a rule's text. `text` is canonical: the look-alike minus reads "-". */
+/** One word, number or symbol of a rule's text. `text` is canonical: a Unicode minus reads "-". */
 export interface Token extends Span {
   readonly kind: "number" | "name" | "sign" | "newline" | "end";
   readonly text: string;

@@ -13,10 +13,10 @@ function texTarget({ kind, name }: Statement): string {
 }
 
 /**
- * A rule in the notation of a paper, one line a quantity, without dollar signs.
+ * A rule as TeX, one line per equation, without dollar signs.
  *
- * @param values - by parameter: the number to print in its place, as for a fitted rule; a text is printed as it
- *   is, a number in full. Other parameters keep their symbols.
+ * @param values - by parameter: the number to print in its place, as for a fitted rule; text is printed as it is, a
+ *   number in full. Other parameters keep their symbols.
  * @example ruleTex(recurrence("N[t+1] = R*N")); // "N_{t+1} = R\\,N_{t}"
  */
 export function ruleTex(rule: Rule, values: Readonly<Record<string, number | string>> = {}): string {

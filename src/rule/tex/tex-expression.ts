@@ -1,8 +1,8 @@
 import type { BinaryOperator, Expression } from "../syntax/expression.js";
-import { notStrength, strengths, unaryMinusStrength } from "../syntax/strengths.js";
+import { notPrecedence, precedence, unaryMinusPrecedence } from "../syntax/precedence.js";
 import { texNumber } from "./tex-number.js";
 
-/** How names are set: a symbol with its period, or a fitted number. */
+/** Typesets a name: a symbol with its period, or a fitted number. */
 export type SetName = (name: string, offset: number) => string;
 
 const signs: Partial<Readonly<Record<BinaryOperator, string>>> = {
@@ -18,20 +18,20 @@ const bracketed = (inside: string): string => `\\left(${inside}\\right)`;
 
 const isNegative = (set: string): boolean => set.startsWith("-");
 
-function strengthOf(at: Expression, set: string): number {
-  if (at.kind === "binary") return at.operator === "/" ? 10 : strengths.get(at.operator)!;
-  if (at.kind === "unary") return at.operator === "-" ? unaryMinusStrength : notStrength;
+function precedenceOf(at: Expression, set: string): number {
+  if (at.kind === "binary") return at.operator === "/" ? 10 : precedence.get(at.operator)!;
+  if (at.kind === "unary") return at.operator === "-" ? unaryMinusPrecedence : notPrecedence;
   // A fitted value may be negative or a power of ten.
-  if (isNegative(set)) return unaryMinusStrength - 1.5;
-  return set.includes("\\times") ? strengths.get("*")! : 10;
+  if (isNegative(set)) return unaryMinusPrecedence - 1.5;
+  return set.includes("\\times") ? precedence.get("*")! : 10;
 }
 
-function grouped(at: Expression, least: number, name: SetName): string {
+function grouped(at: Expression, minPrecedence: number, name: SetName): string {
   const set = texExpression(at, name);
-  return strengthOf(at, set) < least ? bracketed(set) : set;
+  return precedenceOf(at, set) < minPrecedence ? bracketed(set) : set;
 }
 
-/** Products are set side by side; a dot keeps a number from running into what stands before it. */
+/** Products are written side by side; a dot separates a number from the factor before it. */
 const product = (left: string, right: string): string =>
   /^[\d.]/u.test(right) ? `${left} \\cdot ${right}` : `${left}\\,${right}`;
 
@@ -42,7 +42,7 @@ function texBinary(at: Extract<Expression, { kind: "binary" }>, name: SetName): 
     const base = left.kind === "binary" ? bracketed(texExpression(left, name)) : grouped(left, 9, name);
     return `${base.includes("^") ? bracketed(base) : base}^{${texExpression(right, name)}}`;
   }
-  const own = strengths.get(operator)!;
+  const own = precedence.get(operator)!;
   const first = grouped(left, own, name);
   const second = grouped(right, own + 1, name);
   if (operator === "*") return product(first, second);
@@ -63,7 +63,7 @@ const functionNames: Readonly<Record<string, string>> = {
 };
 
 function texCall(at: Extract<Expression, { kind: "call" }>, name: SetName): string {
-  const [a = "", b = "", c = ""] = at.inside.map((part) => texExpression(part, name));
+  const [a = "", b = "", c = ""] = at.args.map((part) => texExpression(part, name));
   if (at.name === "sqrt") return `\\sqrt{${a}}`;
   if (at.name === "abs") return `\\left|${a}\\right|`;
   if (at.name === "floor") return `\\left\\lfloor ${a} \\right\\rfloor`;
@@ -73,7 +73,7 @@ function texCall(at: Extract<Expression, { kind: "call" }>, name: SetName): stri
   }
   if (at.name === "mod") return bracketed(`${a} \\bmod ${b}`);
   if (at.name === "round") return `\\operatorname{round}_{${b === "" ? "0" : b}}${bracketed(a)}`;
-  const inside = at.inside.map((part) => texExpression(part, name)).join(", ");
+  const inside = at.args.map((part) => texExpression(part, name)).join(", ");
   return `${functionNames[at.name]}${bracketed(inside)}`;
 }
 
@@ -86,8 +86,8 @@ export function texExpression(at: Expression, name: SetName): string {
       return name(at.name, at.offset);
     case "unary":
       return at.operator === "-"
-        ? `-${grouped(at.operand, unaryMinusStrength, name)}`
-        : `\\text{not } ${grouped(at.operand, notStrength, name)}`;
+        ? `-${grouped(at.operand, unaryMinusPrecedence, name)}`
+        : `\\text{not } ${grouped(at.operand, notPrecedence, name)}`;
     case "binary":
       return texBinary(at, name);
     case "call":

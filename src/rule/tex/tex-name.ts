@@ -26,29 +26,29 @@ const letters: ReadonlyMap<string, string> = new Map(
   }),
 );
 
-const spelled: ReadonlySet<string> = new Set(letters.values());
+const spelledOut: ReadonlySet<string> = new Set(letters.values());
 
-/** The letter part of a name and what papers write below it: beta0 is beta with 0, N_max is N with max. */
-function split(name: string): { readonly base: string; readonly below: readonly string[] } {
+/** A name split into base and subscripts: beta0 is beta with 0, N_max is N with max. */
+function split(name: string): { readonly base: string; readonly subscripts: readonly string[] } {
   const [first = name, ...rest] = name.split("_").filter((part) => part !== "");
   const [, base = first, digits = ""] = /^(\P{N}+)(\p{N}+)$/u.exec(first) ?? [];
-  return { base, below: [...(digits === "" ? [] : [digits]), ...rest] };
+  return { base, subscripts: [...(digits === "" ? [] : [digits]), ...rest] };
 }
 
 const upright = (word: string): string => `\\mathrm{${word.replace(/[^\p{L}\p{N}]/gu, "")}}`;
 
 function symbol(word: string): string {
   const letter = letters.get(word) ?? word;
-  if (spelled.has(letter)) return `\\${letter}`;
+  if (spelledOut.has(letter)) return `\\${letter}`;
   return [...word].length === 1 ? word : upright(word);
 }
 
 const part = (word: string): string =>
   /^\p{N}+$/u.test(word) || [...word].length === 1 ? word : upright(word);
 
-/** A name as papers set it, with its period where it has one: N1 at t+1 is N_{1,t+1}. */
+/** A name as TeX, with its period where it has one: N1 at t+1 is N_{1,t+1}. */
 export function texName(name: string, period: string): string {
-  const { base, below } = split(name);
-  const lower = [...below.map(part), ...(period === "" ? [] : [period])].join(",");
-  return lower === "" ? symbol(base) : `${symbol(base)}_{${lower}}`;
+  const { base, subscripts } = split(name);
+  const subscript = [...subscripts.map(part), ...(period === "" ? [] : [period])].join(",");
+  return subscript === "" ? symbol(base) : `${symbol(base)}_{${subscript}}`;
 }

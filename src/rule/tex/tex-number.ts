@@ -1,4 +1,4 @@
-/** A number as papers print it: powers of ten written out. */
+/** A number as TeX, with powers of ten written out. */
 export function texNumber(value: number | string): string {
   const [digits = "", exponent] = String(value).split(/e/iu);
   if (exponent === undefined) return digits;

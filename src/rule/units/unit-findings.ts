@@ -3,144 +3,143 @@ import type { CheckedRule } from "../check/checked-rule.js";
 import { expressionText } from "../expression-text.js";
 import type { BinaryOperator, Expression } from "../syntax/expression.js";
 import {
-  joinUnits,
+  multiplyUnits,
   noUnit,
   parseUnit,
-  periodsIn,
-  raisedUnit,
   sameUnit,
+  timeUnitsIn,
   type Unit,
-  unitText,
+  unitPhrase,
+  unitPower,
 } from "./unit.js";
 
-/** `any` is a bare number, which fits every unit in a sum and is a pure number in a product. */
-type Measured = Unit | "any" | "unknown";
+/** `any` is a bare number, which takes any unit in a sum and is dimensionless in a product. */
+type UnitOrUnknown = Unit | "any" | "unknown";
 
-interface Survey {
-  readonly unitOf: (name: string) => Measured;
+interface UnitCheck {
+  readonly unitOf: (name: string) => UnitOrUnknown;
   readonly note: (message: string) => void;
 }
 
-const isKnown = (unit: Measured): unit is Unit => typeof unit !== "string";
+const isKnown = (unit: UnitOrUnknown): unit is Unit => typeof unit !== "string";
 
-/** The unit of things that must be of one unit, as in a sum; notes the first two that are not. */
-function together(survey: Survey, parts: readonly Expression[], what: string): Measured {
-  const units = parts.map((part) => ({ part, unit: measure(survey, part) }));
+/** The unit shared by parts that must have one, as in a sum; notes the first two that differ. */
+function commonUnit(check: UnitCheck, parts: readonly Expression[], what: string): UnitOrUnknown {
+  const units = parts.map((part) => ({ part, unit: unitOfExpression(check, part) }));
   const known = units.flatMap(({ part, unit }) => (isKnown(unit) ? [{ part, unit }] : []));
   const [first] = known;
   const odd = first && known.find(({ unit }) => !sameUnit(unit, first.unit));
   if (first !== undefined && odd !== undefined) {
-    survey.note(
-      `${what} joins ${expressionText(first.part)} in ${unitText(first.unit)} with ${expressionText(odd.part)} in ${unitText(odd.unit)}.`,
+    check.note(
+      `${what} combines different units: ${expressionText(first.part)} has ${unitPhrase(first.unit)}, ${expressionText(odd.part)} has ${unitPhrase(odd.unit)}.`,
     );
   }
   return first?.unit ?? (units.every(({ unit }) => unit === "any") ? "any" : "unknown");
 }
 
-function pureNumber(survey: Survey, part: Expression, what: string): void {
-  const unit = measure(survey, part);
+function requireDimensionless(check: UnitCheck, part: Expression, what: string): void {
+  const unit = unitOfExpression(check, part);
   if (isKnown(unit) && !sameUnit(unit, noUnit)) {
-    survey.note(
-      `${what} is taken of ${expressionText(part)}, which has the unit ${unitText(unit)}; only a pure number has one.`,
-    );
+    check.note(`${what} must be dimensionless, but ${expressionText(part)} has ${unitPhrase(unit)}.`);
   }
 }
 
-function productOf(left: Measured, right: Measured, power: number): Measured {
+function productOf(left: UnitOrUnknown, right: UnitOrUnknown, power: number): UnitOrUnknown {
   if (left === "unknown" || right === "unknown") return "unknown";
   if (left === "any" && right === "any") return "any";
-  return joinUnits(left === "any" ? noUnit : left, right === "any" ? noUnit : right, power);
+  return multiplyUnits(left === "any" ? noUnit : left, right === "any" ? noUnit : right, power);
 }
 
-function powerOf(survey: Survey, base: Expression, exponent: Expression): Measured {
-  const unit = measure(survey, base);
-  pureNumber(survey, exponent, "A power");
+function powerOf(check: UnitCheck, base: Expression, exponent: Expression): UnitOrUnknown {
+  const unit = unitOfExpression(check, base);
+  requireDimensionless(check, exponent, "An exponent");
   if (!isKnown(unit)) return unit;
-  if (exponent.kind === "number") return raisedUnit(unit, exponent.value);
+  if (exponent.kind === "number") return unitPower(unit, exponent.value);
   return sameUnit(unit, noUnit) ? noUnit : "unknown";
 }
 
 const sums: ReadonlySet<BinaryOperator> = new Set(["+", "-"]);
 
-function measureBinary(survey: Survey, at: Extract<Expression, { kind: "binary" }>): Measured {
+function unitOfBinary(check: UnitCheck, at: Extract<Expression, { kind: "binary" }>): UnitOrUnknown {
   const { operator, left, right } = at;
-  if (operator === "*") return productOf(measure(survey, left), measure(survey, right), 1);
-  if (operator === "/") return productOf(measure(survey, left), measure(survey, right), -1);
-  if (operator === "^") return powerOf(survey, left, right);
+  if (operator === "*") return productOf(unitOfExpression(check, left), unitOfExpression(check, right), 1);
+  if (operator === "/") return productOf(unitOfExpression(check, left), unitOfExpression(check, right), -1);
+  if (operator === "^") return powerOf(check, left, right);
   if (operator === "and" || operator === "or") {
-    measure(survey, left);
-    measure(survey, right);
+    unitOfExpression(check, left);
+    unitOfExpression(check, right);
     return "any";
   }
   const what = sums.has(operator) ? `${expressionText(at)} ` : `The comparison ${expressionText(at)} `;
-  const unit = together(survey, [left, right], what.trimEnd());
+  const unit = commonUnit(check, [left, right], what.trimEnd());
   return sums.has(operator) ? unit : "any";
 }
 
-function measureCall(survey: Survey, at: Extract<Expression, { kind: "call" }>): Measured {
-  const { name, inside } = at;
-  if (name === "min" || name === "max" || name === "mod") return together(survey, inside, expressionText(at));
+function unitOfCall(check: UnitCheck, at: Extract<Expression, { kind: "call" }>): UnitOrUnknown {
+  const { name, args } = at;
+  if (name === "min" || name === "max" || name === "mod") return commonUnit(check, args, expressionText(at));
   if (name === "if") {
-    measure(survey, inside[0]!);
-    return together(survey, inside.slice(1), expressionText(at));
+    unitOfExpression(check, args[0]!);
+    return commonUnit(check, args.slice(1), expressionText(at));
   }
   if (name === "sqrt") {
-    const unit = measure(survey, inside[0]!);
-    return isKnown(unit) ? raisedUnit(unit, 0.5) : unit;
+    const unit = unitOfExpression(check, args[0]!);
+    return isKnown(unit) ? unitPower(unit, 0.5) : unit;
   }
   if (name === "abs" || name === "round" || name === "floor" || name === "ceil")
-    return measure(survey, inside[0]!);
-  if (name !== "sign") pureNumber(survey, inside[0]!, name);
+    return unitOfExpression(check, args[0]!);
+  if (name !== "sign") requireDimensionless(check, args[0]!, `The argument of ${name}`);
   return noUnit;
 }
 
-function measure(survey: Survey, at: Expression): Measured {
+function unitOfExpression(check: UnitCheck, at: Expression): UnitOrUnknown {
   switch (at.kind) {
     case "number":
       return "any";
     case "name":
-      return survey.unitOf(at.name);
+      return check.unitOf(at.name);
     case "unary":
-      return measure(survey, at.operand);
+      return unitOfExpression(check, at.operand);
     case "binary":
-      return measureBinary(survey, at);
+      return unitOfBinary(check, at);
     case "call":
-      return measureCall(survey, at);
+      return unitOfCall(check, at);
   }
 }
 
-function mixedPeriods(units: Readonly<Record<string, string>>): readonly string[] {
+function mixedTimeUnits(units: Readonly<Record<string, string>>): readonly string[] {
   const named = Object.entries(units).flatMap(([name, text]) =>
-    periodsIn(parseUnit(text)).map((period) => ({ name, period })),
+    timeUnitsIn(parseUnit(text)).map((period) => ({ name, period })),
   );
   const [first] = named;
   const odd = named.find(({ period }) => period !== first?.period);
   if (first === undefined || odd === undefined) return [];
   return [
-    `"${first.name}" is stated per ${first.period} and "${odd.name}" per ${odd.period}; a step is one period, so convert one of them by compounding.`,
+    `"${first.name}" is per ${first.period} and "${odd.name}" per ${odd.period}, but a step is one period. Convert one of them by compounding.`,
   ];
 }
 
-/** What can be seen to be wrong with the units of a rule. A name without a unit is never at odds with another. */
+const remedy = "Correct the units or the rule.";
+
+/** Inconsistent units of a rule. A name without a unit agrees with every other. */
 export function unitFindings(rule: CheckedRule, units: Readonly<Record<string, string>>): readonly Warning[] {
   if (Object.keys(units).length === 0) return [];
-  const messages = mixedPeriods(units).slice();
-  const known = new Map<string, Measured>();
+  const messages: string[] = [...mixedTimeUnits(units)];
+  const known = new Map<string, UnitOrUnknown>();
   for (const [name, text] of Object.entries(units)) if (text !== "") known.set(name, parseUnit(text));
-  const survey: Survey = {
+  const check: UnitCheck = {
     unitOf: (name) => (name === "t" ? "any" : (known.get(name) ?? "unknown")),
-    note: (message) => messages.push(message),
+    note: (message) => messages.push(`${message} ${remedy}`),
   };
   for (const { name, expression } of rule.statements) {
-    const unit = measure(survey, expression);
+    const unit = unitOfExpression(check, expression);
     const own = known.get(name);
     if (own === undefined) known.set(name, unit);
     else if (isKnown(own) && isKnown(unit) && !sameUnit(own, unit)) {
-      messages.push(`The line of "${name}", stated in ${unitText(own)}, comes out in ${unitText(unit)}.`);
+      messages.push(
+        `The right-hand side of "${name}" has ${unitPhrase(unit)}, but ${name} has ${unitPhrase(own)}. ${remedy}`,
+      );
     }
   }
-  return messages.map((message) => ({
-    code: "units-disagree",
-    message: `${message} Correct the unit, or the rule.`,
-  }));
+  return messages.map((message) => ({ code: "units-disagree", message }));
 }

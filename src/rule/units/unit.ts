@@ -1,8 +1,8 @@
-/** Powers of basic units; an empty map is a pure number. */
+/** Powers of basic units; an empty map is dimensionless. */
 export type Unit = ReadonlyMap<string, number>;
 
-/** Lengths of a period: a step is one period, so they cancel in a rule and are compared with each other only. */
-const periods: ReadonlySet<string> = new Set([
+/** Time units: a step is one period, so they cancel in a rule and are compared with each other only. */
+const timeUnits: ReadonlySet<string> = new Set([
   "second",
   "s",
   "minute",
@@ -21,16 +21,16 @@ const periods: ReadonlySet<string> = new Set([
 ]);
 
 const singular = (word: string): string =>
-  periods.has(word.replace(/s$/u, "")) ? word.replace(/s$/u, "") : word;
+  timeUnits.has(word.replace(/s$/u, "")) ? word.replace(/s$/u, "") : word;
 
-function multiplied(into: Map<string, number>, word: string, power: number): void {
+function multiplyInto(into: Map<string, number>, word: string, power: number): void {
   const total = (into.get(word) ?? 0) + power;
   if (total === 0) into.delete(word);
   else into.set(word, total);
 }
 
 /**
- * Reads a unit such as "cells/mL", "1/month", "10^4 cells/mL", "kg per ha": factors joined by blanks, * or /,
+ * Reads a unit such as "cells/mL", "1/month", "10^4 cells/mL", "kg per ha": factors separated by spaces, * or /,
  * each with a whole power. A scale such as 10^4 or 1000 is a factor like a word.
  */
 export function parseUnit(text: string): Unit {
@@ -43,8 +43,8 @@ export function parseUnit(text: string): Unit {
     }
     const [, word = part, power = "1"] = /^(.*?[^\d])\^?(-?\d+)$/u.exec(part) ?? [];
     const isScale = /^[\d.]/u.test(part);
-    if (isScale) multiplied(unit, part === "1" ? "" : part, sign);
-    else multiplied(unit, singular(word.replace(/\^$/u, "")), sign * Number(power));
+    if (isScale) multiplyInto(unit, part === "1" ? "" : part, sign);
+    else multiplyInto(unit, singular(word.replace(/\^$/u, "")), sign * Number(power));
   }
   unit.delete("");
   return unit;
@@ -53,33 +53,38 @@ export function parseUnit(text: string): Unit {
 export const noUnit: Unit = new Map();
 
 /** The product of two units, the second raised to a power. */
-export function joinUnits(a: Unit, b: Unit, power: number): Unit {
+export function multiplyUnits(a: Unit, b: Unit, power: number): Unit {
   const unit = new Map(a);
-  for (const [word, own] of b) multiplied(unit, word, own * power);
+  for (const [word, own] of b) multiplyInto(unit, word, own * power);
   return unit;
 }
 
-export const raisedUnit = (unit: Unit, power: number): Unit => joinUnits(noUnit, unit, power);
+export const unitPower = (unit: Unit, power: number): Unit => multiplyUnits(noUnit, unit, power);
 
-/** The part of a unit that is not the length of a period. */
-export const withoutPeriods = (unit: Unit): Unit => new Map([...unit].filter(([word]) => !periods.has(word)));
+/** A unit without its time units. */
+export const withoutTimeUnits = (unit: Unit): Unit =>
+  new Map([...unit].filter(([word]) => !timeUnits.has(word)));
 
-/** The lengths of a period that a unit speaks of. */
-export const periodsIn = (unit: Unit): readonly string[] =>
-  [...unit.keys()].filter((word) => periods.has(word));
+/** The time units in a unit. */
+export const timeUnitsIn = (unit: Unit): readonly string[] =>
+  [...unit.keys()].filter((word) => timeUnits.has(word));
 
 export const sameUnit = (a: Unit, b: Unit): boolean => {
-  const left = withoutPeriods(a);
-  const right = withoutPeriods(b);
+  const left = withoutTimeUnits(a);
+  const right = withoutTimeUnits(b);
   return left.size === right.size && [...left].every(([word, power]) => right.get(word) === power);
 };
 
 const powered = (word: string, power: number): string => (power === 1 ? word : `${word}^${power}`);
 
-/** A unit as text: what is multiplied, then what is divided by. */
-export function unitText(unit: Unit): string {
+/** "the unit cells/mL", or "no unit". */
+export const unitPhrase = (unit: Unit): string =>
+  unit.size === 0 ? "no unit" : `the unit ${unitText(unit)}`;
+
+/** A unit as text: numerator, then denominator. */
+function unitText(unit: Unit): string {
   const above = [...unit].filter(([, power]) => power > 0).map(([word, power]) => powered(word, power));
   const below = [...unit].filter(([, power]) => power < 0).map(([word, power]) => powered(word, -power));
-  if (below.length === 0) return above.length === 0 ? "a pure number" : above.join(" ");
+  if (below.length === 0) return above.join(" ");
   return `${above.length === 0 ? "1" : above.join(" ")}/${below.join("/")}`;
 }

@@ -1,0 +1,11 @@
+export { escapeHtml, untypeset } from "./markup/escape-html.js";
+export { decimalsFor, fixedDecimals, minorUnits } from "./numbers/fixed-decimals.js";
+export { interval } from "./numbers/interval.js";
+export { formatDigits, type NumberFormat, numberFormat } from "./numbers/number-format.js";
+export { pValue } from "./numbers/p-value.js";
+export { percent } from "./numbers/percent.js";
+export { powerOfTen, significant } from "./numbers/significant.js";
+export { superscript } from "./numbers/superscript.js";
+export { list } from "./sentences/list.js";
+export { count, nOfM, plural } from "./sentences/plural.js";
+export { capitalizeSentence, joinSentences } from "./sentences/sentences.js";

@@ -1,7 +1,0 @@
-/** Delay in whole periods. */
-export interface DelayOption {
-  readonly lag: number;
-}
-
-/** How a name is written as it was some periods ago. */
-export const past = (name: string, lag: number): string => (lag === 0 ? name : `${name}[t-${lag}]`);
