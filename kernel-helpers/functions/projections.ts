@@ -1,6 +1,7 @@
 import type { Fit } from "../../src/estimate/index.js";
 import { frozenCopy } from "../../src/numeric/index.js";
 import {
+  type Forecast as EngineForecast,
   type ForecastOptions,
   forecast as forecastFit,
   type SimulateOptions,
@@ -36,6 +37,11 @@ export function forecast(fit: Fit, options: ForecastOptions): Forecast {
     `forecast "${ruleLabel(fit.rule)}" over ${options.periods} periods, ${ahead.options.paths} paths`,
   );
   caseLog.noteForecast(fit);
+  return presentForecast(ahead);
+}
+
+/** Makes a forecast ready for a reader, and the fit that it holds. */
+export function presentForecast(ahead: EngineForecast): Forecast {
   presentFit(ahead.fit);
   return showing(forecastWithValues(ahead), () => shownTogether(showForecast(ahead)));
 }

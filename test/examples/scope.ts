@@ -38,6 +38,18 @@ async function make(): Promise<Readonly<Record<string, unknown>>> {
   const crowdingFit = fit(crowding, counts, { errors: "observation" });
   const shelteredFit = fit(sheltered, counts, { errors: "observation" });
   const fitted = shelteredFit;
+  const flasks = observations(
+    {
+      flask: ["A", "A", "A", "A", "A", "A", "B", "B", "B", "B", "B", "B", "C", "C", "C", "C", "C", "C"],
+      hour: [0, 1, 2, 3, 4, 5, 0, 1, 2, 3, 4, 5, 0, 1, 2, 3, 4, 5],
+      N: [10, 12.4, 14.1, 17.9, 20.6, 25.4, 20, 23.1, 29.4, 33.9, 42.5, 49.8, 5, 5.9, 7.6, 8.4, 10.7, 12.2],
+    },
+    { period: "hour", step: "hour", by: "flask", value: "N" },
+  );
+  const flasksFit = fit(recurrence("N[t+1] = R*N"), flasks, {
+    errors: "observation",
+    distribution: "lognormal",
+  });
   const ahead = forecast(fitted, { periods: 12 });
   const ready = timeToReach(ahead, { risesTo: 600 });
   return {
@@ -49,6 +61,7 @@ async function make(): Promise<Readonly<Record<string, unknown>>> {
     crowdingFit,
     shelteredFit,
     fitted,
+    flasksFit,
     ahead,
     ready,
   };
