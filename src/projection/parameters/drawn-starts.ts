@@ -40,7 +40,7 @@ export function unknownsDraw(fit: Fit, group: GroupFit): UnknownsDraw {
   const loose = together ? undefined : loosest(group);
   if (loose !== undefined) {
     const draw = drawAlongProfile(fit, group, loose);
-    if (draw === undefined) throw refuseUndetermined(group.group, openNames(group));
+    if (draw === undefined) throw undetermined(group);
     return { draw, method: "along the profile", followed: loose.name };
   }
   const drawn = group.estimates.flatMap(({ role }, i) => (role === "scale" ? [] : [i]));
@@ -51,7 +51,7 @@ export function unknownsDraw(fit: Fit, group: GroupFit): UnknownsDraw {
     Float64Array.from(drawn.flatMap((i) => drawn.map((j) => group.covariance[i * size + j]!))),
     group.degreesOfFreedom,
   );
-  if (draw === undefined) throw refuseUndetermined(group.group, openNames(group));
+  if (draw === undefined) throw undetermined(group);
   return { draw, method: "around the estimates", followed: undefined };
 }
 
@@ -113,6 +113,14 @@ function boundsOf(fit: Fit, group: GroupFit): (unknowns: Float64Array) => boolea
   return (unknowns) => limits.every(([low, high], i) => unknowns[i]! >= low && unknowns[i]! <= high);
 }
 
-function openNames(group: GroupFit): readonly string[] {
-  return group.estimates.filter((each) => each.standardError === undefined).map((each) => each.name);
+function undetermined({ group, estimates }: GroupFit): Error {
+  const open = estimates.filter(
+    ({ standardError, role }) => standardError === undefined && role === "parameter",
+  );
+  const twoErrors = estimates.some(({ name }) => name.startsWith("observation error"));
+  return refuseUndetermined(
+    group,
+    open.map(({ name }) => name),
+    twoErrors,
+  );
 }
