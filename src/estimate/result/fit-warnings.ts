@@ -1,6 +1,6 @@
 import type { Warning } from "../../numeric/index.js";
 import { nonsmoothCalls, type Rule } from "../../rule/index.js";
-import type { FitOptions } from "../options/fit-options.js";
+import { type FitOptions, onLogScale } from "../options/fit-options.js";
 import type { Optimum } from "../search/optimum.js";
 import type { Unknowns } from "../unknowns/unknowns.js";
 import { correlationWarnings } from "./correlation-warnings.js";
@@ -25,7 +25,7 @@ export function fitWarnings(fit: Omit<GroupFit, "warnings">, context: FitContext
   return [
     ...stopWarning(fit),
     ...undetermined(fit, context),
-    ...spreadsNotSeparated(fit),
+    ...spreadsNotSeparated(fit, onLogScale(context.options)),
     ...atBounds(fit, context.unknowns),
     ...rivals(fit),
     ...correlationWarnings(fit),
@@ -66,7 +66,7 @@ function undetermined(fit: Omit<GroupFit, "warnings">, { found }: FitContext): W
 }
 
 /** The split of process and observation error, or a dispersion, that the record leaves open. */
-function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">): Warning[] {
+function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">, logScale: boolean): Warning[] {
   const loose = fit.estimates.filter((each) => each.role === "scale" && each.standardError === undefined);
   if (loose.length === 0) return [];
   const limits = loose.map(
@@ -77,7 +77,7 @@ function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">): Warning[] {
     {
       code: both ? "errors-not-separated" : "not-determined",
       message: both
-        ? `The record separates the two errors only weakly (${limits.join("; ")}). If replicates tell the standard deviation of a reading, give it as { sd: 0.1 }.`
+        ? `The record separates the two errors only weakly (${limits.join("; ")}). Where the standard deviation of a reading is known, from replicates or a survey's error, give it: \`sd: 0.15\`${logScale ? " on the log scale (a coefficient of variation of 15%)" : ", in the record's unit"}.`
         : `The record gives no two-sided interval: ${limits.join("; ")}.`,
     },
   ];
