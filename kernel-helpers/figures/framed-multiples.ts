@@ -3,15 +3,15 @@ import { type Axis, type Figure, figure } from "./figure.js";
 import type { Layer } from "./layer.js";
 import { significant } from "./number-text.js";
 import { axisTitle } from "./plot-text.js";
-import { type DrawnLine, recordedStyle } from "./recorded-series.js";
+import { type LineSeries, recordedStyle } from "./recorded-series.js";
 import type { SmallMultiplesOptions, SmallSeries } from "./small-multiples.js";
-import { yearLike } from "./year-like.js";
+import { areYears } from "./year-axis.js";
 
-/** Least and greatest value on an axis. */
+/** Smallest and largest value on an axis. */
 export type Ends = readonly [number, number];
 type Both = { readonly x: Ends; readonly y: Ends };
 
-/** All series in one panel: a grid of frames, so that a hundred cost no more to draw than one. */
+/** All series in one panel as a grid of frames, which draws as fast for a hundred series as for one. */
 export function framedMultiples(
   { title, x, y, series, notes = [] }: SmallMultiplesOptions,
   ends: Both,
@@ -38,7 +38,7 @@ export function framedMultiples(
     ),
   ];
   const from = ([least, greatest]: Ends): string => `from ${significant(least)} to ${significant(greatest)}`;
-  const scale = `Every frame: ${axisTitle(x)} ${from(ends.x)} across, ${axisTitle(y)} ${from(ends.y)} upwards.`;
+  const scale = `Axes of every frame: ${axisTitle(x)} ${from(ends.x)} (horizontal), ${axisTitle(y)} ${from(ends.y)} (vertical).`;
   const bare = { bare: true } as const;
   const panel = {
     title: "",
@@ -54,9 +54,9 @@ export function framedMultiples(
   });
 }
 
-/** A series moved and scaled into its frame. */
+/** A series scaled into its frame. */
 function inFrame(
-  line: DrawnLine,
+  line: LineSeries,
   at: { column: number; row: number },
   ends: Both,
 ): { x: number[]; y: number[] } {
@@ -68,7 +68,7 @@ function inFrame(
   };
 }
 
-/** Several lines as one, with a break after each. */
+/** Several lines as one, with a gap after each. */
 function together(lines: readonly { x: number[]; y: number[] }[]): { x: number[]; y: number[] } {
   return {
     x: lines.flatMap((line) => [...line.x, Number.NaN]),
@@ -77,9 +77,9 @@ function together(lines: readonly { x: number[]; y: number[] }[]): { x: number[]
 }
 
 function seriesTable(title: string, x: Axis, y: Axis, series: readonly SmallSeries[]): Table {
-  const grouped = !series.every(({ recorded }) => yearLike(Array.from<unknown>(recorded.x)));
+  const grouped = !series.every(({ recorded }) => areYears(Array.from<unknown>(recorded.x)));
   return table({
-    title: `Numbers behind: ${title}`,
+    title: `Data: ${title}`,
     columns: [
       { key: "name", label: "Series", kind: "text" },
       { key: "x", label: axisTitle(x), kind: "number", digits: 6, grouped },

@@ -1,17 +1,17 @@
+import { downsample } from "./downsample.js";
 import type { Panel } from "./figure.js";
 import type { BandLayer, BarsLayer, Layer, LineLayer } from "./layer.js";
 import { type SeriesStyle, seriesStyle, tint } from "./palette.js";
 import { plainValues } from "./plain-values.js";
 import { plotText } from "./plot-text.js";
 import { pointsTrace } from "./points-trace.js";
-import { thinned } from "./thinned.js";
 
-/** One trace of the plotting library, as data. */
+/** One trace of the plotting library. */
 export type PlotTrace = Readonly<Record<string, unknown>>;
 
 const bandEdges = ["2px,3px", "7px,3px", "solid"];
 
-/** The traces of a panel; thresholds, vertical marks and arrows belong to the layout. */
+/** The traces of a panel; thresholds, vertical lines and arrows are part of the layout. */
 export function plotTraces(panel: Panel, at: number): PlotTrace[] {
   const axes = { xaxis: axisName("x", at), yaxis: axisName("y", at) };
   return panel.layers.flatMap((layer, turn) => {
@@ -22,7 +22,7 @@ export function plotTraces(panel: Panel, at: number): PlotTrace[] {
   });
 }
 
-/** "x", "x2", "x3": what the plotting library calls the axes of a panel. */
+/** Names of panel axes in the plotting library: "x", "x2", "x3". */
 export function axisName(letter: "x" | "y", at: number): string {
   return at === 0 ? letter : `${letter}${at + 1}`;
 }
@@ -46,7 +46,7 @@ function layerTrace(layer: Layer, style: SeriesStyle): PlotTrace | undefined {
 }
 
 function lineTrace(layer: LineLayer, { colour, dash }: SeriesStyle): PlotTrace {
-  const kept = thinned(layer.x, layer.y)?.kept;
+  const kept = downsample(layer.x, layer.y)?.kept;
   const broken = layer.dashed ? "8px,4px" : dash;
   return {
     type: "scatter",
@@ -65,7 +65,7 @@ function lineTrace(layer: LineLayer, { colour, dash }: SeriesStyle): PlotTrace {
 
 /** One closed outline: along the lower edge and back along the upper. */
 function bandTrace(layer: BandLayer, { colour }: SeriesStyle): PlotTrace {
-  const kept = thinned(layer.x, layer.upper)?.kept;
+  const kept = downsample(layer.x, layer.upper)?.kept;
   const x = plainValues(layer.x, kept);
   const lower = plainValues(layer.lower, kept);
   const upper = plainValues(layer.upper, kept);
@@ -86,7 +86,7 @@ function bandTrace(layer: BandLayer, { colour }: SeriesStyle): PlotTrace {
 function barsTrace(layer: BarsLayer, { colour }: SeriesStyle): PlotTrace {
   return {
     type: "bar",
-    orientation: layer.lying ? "h" : "v",
+    orientation: layer.horizontal ? "h" : "v",
     x: plainValues(layer.x, undefined),
     y: plainValues(layer.y, undefined),
     marker: { color: tint(colour, 0.85), line: { color: colour, width: 1.5 } },

@@ -19,15 +19,15 @@ import {
   writeTables,
 } from "../../src/store/index.js";
 import {
+  attachNotes,
   columnsOf,
-  marksFound,
-  noteFrame,
-  notesOf,
+  correctionNotes,
+  frameNotes,
   type RecordLike,
   type Result,
-  shownTable,
   tablesOf,
   toFrame,
+  withCorrectionColumns,
 } from "../dataframe/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
@@ -50,8 +50,8 @@ import { observationsBundle } from "./show-observations.js";
 export async function readRecord(path: string, options: ReadOptions = {}): Promise<DataFrame> {
   const table = await readTable(path, options);
   const frame = toFrame(table);
-  const found = Object.freeze([...table.source.found, ...marksFound(table.names)]);
-  noteFrame(frame, { ...notesOf(frame), source: Object.freeze({ ...table.source, found }) });
+  const found = Object.freeze([...table.source.found, ...correctionNotes(table.names)]);
+  attachNotes(frame, { ...frameNotes(frame), source: Object.freeze({ ...table.source, found }) });
   caseLog.noteRecord({ path, rows: table.source.rows, checksum: table.source.checksum });
   return frame;
 }
@@ -88,7 +88,7 @@ function withDecisions(
   { format, table }: WriteOptions,
 ): readonly NamedTable[] {
   const { decisions = [] } = record;
-  const shown = { name: table ?? "record", table: shownTable(record) };
+  const shown = { name: table ?? "record", table: withCorrectionColumns(record) };
   if (decisions.length === 0 || !holdsSeveralTables(path, format)) return [shown];
   const name = table === undefined ? "decisions" : `${table} decisions`;
   return [shown, { name, table: tableOfRows(decisionRows(decisions)) }];

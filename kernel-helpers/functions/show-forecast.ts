@@ -65,7 +65,7 @@ function projected(ahead: Forecast, group: GroupForecast, name: string): Project
       .filter((band) => band.kind === "future observation")
       .map(({ level, kind, lower, upper }) => ({ level, of: kind, x, lower, upper })),
     recordEnd: x[end]!,
-    ...(horizon !== undefined && x[end + horizon] !== undefined && { horizon: x[end + horizon]! }),
+    ...(horizon !== undefined && x[end + horizon] !== undefined && { predictionHorizon: x[end + horizon]! }),
   };
 }
 
