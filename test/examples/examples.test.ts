@@ -8,7 +8,7 @@ import { existsSync, readdirSync, readFileSync } from "node:fs";
 import { join, relative } from "node:path";
 import { pathToFileURL } from "node:url";
 import ts from "typescript";
-import { describe, expect, test } from "vitest";
+import { afterEach, describe, expect, test } from "vitest";
 import * as periodwise from "../../kernel-helpers/index.js";
 import { scope } from "./scope.js";
 
@@ -87,6 +87,9 @@ async function roomOf(file: string): Promise<Record<string, unknown>> {
   const door = join(root, top!, room!, "index.ts");
   return existsSync(door) ? ((await import(pathToFileURL(door).href)) as Record<string, unknown>) : {};
 }
+
+// An example may set the number format.
+afterEach(() => void periodwise.numberFormat("standard"));
 
 describe.each([["kernel-helpers"], ["src"]])("examples in %s", (folder) => {
   test.each(

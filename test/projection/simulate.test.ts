@@ -150,7 +150,7 @@ test("schedules and one-off events reach the periods they name, and scenarios sh
 });
 
 test("a path that leaves the range of a state stops, and it is said at which period", () => {
-  // DOMAIN of the trade, common practice: "Period 17: the rule gives -3.2; projection stopped at period 16."
+  // Common practice, no source: the message names the value, its period and where the projection stopped.
   const rule = recurrence("B[t+1] = B - C", { bounds: { B: [0, Infinity] } });
   const found = simulate(rule, { parameters: { C: 30 }, initial: { B: 100 }, periods: 6 });
   expect(found.groups[0]!.states[0]!.central).toEqual([100, 70, 40, 10, Number.NaN, Number.NaN, Number.NaN]);

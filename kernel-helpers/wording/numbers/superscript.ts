@@ -15,7 +15,7 @@ const superscripts: Readonly<Record<string, string>> = {
 /**
  * Integer powers in a unit as superscript digits, and "×" between a number and a power of ten.
  *
- * @example raised("120 10^4 cells/mL"); // "120 × 10⁴ cells/mL"
+ * @example superscript("120 10^4 cells/mL"); // "120 × 10⁴ cells/mL"
  */
 export function superscript(text: string): string {
   const multiplied = text.replace(/(?<=\d) +(?=10\^-?\d)/g, " × ");
