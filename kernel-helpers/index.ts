@@ -9,7 +9,6 @@ export type {
   Solved,
   SolveOptions,
   Target,
-  TimeToReach,
   TimeToReachOptions,
   Tradeoff,
   TradeoffOptions,
@@ -32,6 +31,7 @@ export type {
   ExactTrajectory,
   ExactTrajectoryOptions,
   HeldSetting,
+  InputPlan,
   LyapunovExponent,
   LyapunovExponentOptions,
   MatrixGrowth,
@@ -40,40 +40,27 @@ export type {
   Trajectory,
   TrajectoryOptions,
 } from "../src/dynamics/index.js";
-export {
-  type Bootstrap,
-  type BootstrapOptions,
-  type Estimate,
-  type EstimateChange,
-  estimates,
-  type Fit,
-  type FitOptions,
-  type GridIntervalOptions,
-  type GroupFit,
-  type Interval,
-  points,
-  summary,
-  type UpdatedFit,
+export type {
+  Bootstrap,
+  BootstrapOptions,
+  Estimate,
+  EstimateChange,
+  FitOptions,
+  GridIntervalOptions,
+  Interval,
 } from "../src/estimate/index.js";
 export type {
-  ChangePoint,
   ChangePointOptions,
-  Check,
   CheckOptions,
-  CompareOptions,
   Comparison,
   DensityDependence,
   DensityOptions,
-  Proposal,
   ProposeOptions,
 } from "../src/evidence/index.js";
 export { leastSquares, ModelError } from "../src/numeric/index.js";
 export type {
-  Forecast,
   ForecastOptions,
-  InputPlan,
   SimulateOptions,
-  Simulation,
 } from "../src/projection/index.js";
 export type {
   Correction,
@@ -82,7 +69,6 @@ export type {
   Differences,
   Finding,
   ObservationOptions,
-  Observations,
 } from "../src/record/index.js";
 export type { ReadOptions, WriteOptions } from "../src/store/index.js";
 export { frame, type RecordLike, sourceOf } from "./dataframe/index.js";
@@ -110,7 +96,7 @@ export {
   trajectory,
 } from "./functions/dynamics.js";
 export { type Explanation, explain } from "./functions/explain.js";
-export { fit } from "./functions/fits.js";
+export { estimates, fit, points, summary } from "./functions/fits.js";
 export { expanding, fill, longer, rolling, shift, toPeriods, wider } from "./functions/frames.js";
 export { forecast, simulate } from "./functions/projections.js";
 export { propose } from "./functions/proposals.js";
@@ -131,6 +117,19 @@ export {
 export { show } from "./functions/show.js";
 export type { Term } from "./glossary/index.js";
 export { type Progress, progress, withProgress } from "./progress/index.js";
+export type {
+  ChangePoint,
+  Check,
+  CompareOptions,
+  Fit,
+  Forecast,
+  GroupFit,
+  Observations,
+  Proposal,
+  Simulation,
+  TimeToReach,
+  UpdatedFit,
+} from "./results/index.js";
 export {
   type NumberFormat,
   numberFormat,

@@ -6,12 +6,12 @@ import { type ColumnTable, packed } from "../../src/record/index.js";
  * present weights, censoring (-1 below, 1 above) and replicates.
  */
 export function observationsTable(observations: Observations): ColumnTable {
-  const { groups, states, inputs, period } = observations;
+  const { groups, states, inputs, axis } = observations;
   const columns: [string, (group: ObservedGroup, i: number) => unknown][] = [];
   if (groups.length > 1) columns.push(["series", (group) => group.name]);
   columns.push(["row", (group, i) => group.rows[i]], ["step", (group, i) => group.index[i]]);
   const dated = groups.some(({ labels }) => labels !== undefined);
-  columns.push([period.column, (group, i) => (dated ? group.labels?.[i] : group.time[i])]);
+  columns.push([axis.column, (group, i) => (dated ? group.labels?.[i] : group.time[i])]);
   for (const { name } of states) columns.push([name, (group, i) => group.values[name]![i]]);
   for (const name of inputs) columns.push([name, (group, i) => group.inputs[name]![i]]);
   if (groups.some(({ weights }) => weights)) columns.push(["weight", (group, i) => group.weights?.[i]]);

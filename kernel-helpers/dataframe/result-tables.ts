@@ -10,7 +10,7 @@ interface Inherited {
 }
 
 /** Parts that are results themselves, with tables of their own. */
-const separateKinds = new Set(["observations", "rule", "fit", "forecast"]);
+const separateKinds = new Set(["observations", "rule", "fit", "forecast", "period-axis"]);
 
 /**
  * The tables of any result: its single values as "summary", and every list as a table of the same name, with one row per

@@ -19,6 +19,8 @@ export interface ForecastBand {
 export interface ProjectedSeries {
   /** "" for a single series. */
   readonly name: string;
+  /** Its own horizontal axis, where that of the figure does not hold. */
+  readonly x?: Axis;
   readonly recorded: RecordedSeries;
   readonly central: LineSeries;
   readonly bands: readonly ForecastBand[];
@@ -45,7 +47,7 @@ export function fanFigure({ title, x, y, series, threshold, event, notes = [] }:
   const panels = series.map(
     (each): Panel => ({
       title: each.name,
-      x,
+      x: each.x ?? x,
       y,
       layers: [
         ...fanLayers(each),

@@ -2,6 +2,7 @@ import { type Column, type Table, table } from "../tables/index.js";
 import { downsample } from "./downsample.js";
 import type { Figure, Panel } from "./figure.js";
 import type { Layer } from "./layer.js";
+import { placeText } from "./period-places.js";
 import { axisTitle } from "./plot-text.js";
 import { areYears } from "./year-axis.js";
 
@@ -22,11 +23,15 @@ function panelData(panel: Panel, title: string): Table | undefined {
   const across = horizontal ? panel.y : panel.x;
   const rows = mergedRows(drawn);
   const grouped = !areYears(rows.map((row) => row["place"]));
-  const place: Column = { key: "place", label: axisTitle(across), kind: "number", digits: 6, grouped };
+  const label = axisTitle(across);
+  const place: Column = across.periods
+    ? { key: "place", label, kind: "text" }
+    : { key: "place", label, kind: "number", digits: 6, grouped };
+  const labelled = rows.map((row) => ({ ...row, place: placeText(across, row["place"] as number | string) }));
   return table({
     title: panel.title === "" ? `Data: ${title}` : panel.title,
     columns: [place, ...drawn.flatMap(layerColumns)],
-    rows,
+    rows: across.periods ? labelled : rows,
     notes: drawn.some((layer) => listedPlaces(layer).length < layer.x.length) ? [excerptNote] : [],
     limit: 60,
   });

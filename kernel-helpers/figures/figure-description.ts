@@ -1,7 +1,8 @@
 import { plural } from "../wording/index.js";
-import type { Figure, Panel } from "./figure.js";
+import type { Axis, Figure, Panel } from "./figure.js";
 import type { Layer, Places } from "./layer.js";
 import { significant } from "./number-text.js";
+import { placeText } from "./period-places.js";
 import { axisTitle } from "./plot-text.js";
 
 /** Text alternative of a figure: what it shows, in sentences. */
@@ -14,10 +15,10 @@ function describePanel(panel: Panel): string[] {
   const name = panel.title === "" ? "" : `Panel "${panel.title}". `;
   const axes = `${name}Horizontal axis: ${axisTitle(panel.x)}; vertical axis: ${axisTitle(panel.y)}.`;
   const described = panel.layers.filter((layer) => layer.mark !== "label" && layer.inLegend !== false);
-  return [axes, ...described.map(describeLayer)];
+  return [axes, ...described.map((layer) => describeLayer(layer, panel.x))];
 }
 
-function describeLayer(layer: Layer): string {
+function describeLayer(layer: Layer, across: Axis): string {
   switch (layer.mark) {
     case "points":
       return `${layer.name}: ${plural(layer.x.length, "point")}, ${range(layer.y)}.`;
@@ -30,7 +31,7 @@ function describeLayer(layer: Layer): string {
     case "threshold":
       return `${layer.name}: threshold at ${significant(layer.y)}.`;
     case "vertical":
-      return `${layer.name}: vertical line at ${typeof layer.x === "number" ? significant(layer.x) : layer.x}.`;
+      return `${layer.name}: vertical line at ${placeText(across, layer.x)}.`;
     case "label":
       return layer.name;
     case "arrow":

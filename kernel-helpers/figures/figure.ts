@@ -1,3 +1,5 @@
+import { frozenCopy } from "../../src/numeric/index.js";
+import type { PeriodAxis } from "../../src/record/index.js";
 import { type Bundle, showing, type Table } from "../tables/index.js";
 import { emptyFigureError } from "./errors.js";
 import { figureBundle } from "./figure-bundle.js";
@@ -12,6 +14,8 @@ export interface Axis {
   readonly scale?: "linear" | "log" | "category" | "date";
   /** Range of the axis, in its unit. Default: the range of the layers. */
   readonly ends?: readonly [number, number];
+  /** Periods of the axis where these have labels; `zero` is the position of period 0. */
+  readonly periods?: { readonly axis: PeriodAxis; readonly zero: number };
   /** Without ticks and grid, for an axis without a meaning of its own. */
   readonly bare?: boolean;
 }
@@ -57,16 +61,10 @@ export interface FigureOptions {
  *   layers: [{ mark: "points", name: "counted", x: [0, 1], y: [90, 83] }] });
  */
 export function figure(options: FigureOptions): Figure {
-  const { title, x, y, layers } = options;
-  const panels = options.panels ?? (x && y && layers ? [{ title: "", x, y, layers }] : []);
+  // Copies: the caller's lists must not be frozen, nor change the figure later.
+  const { title, x, y, layers, panels: given, summary = "", notes = [], numbers } = frozenCopy(options);
+  const panels = given ?? (x && y && layers ? [{ title: "", x, y, layers }] : []);
   if (panels.length === 0 || panels.some((panel) => panel.layers.length === 0)) throw emptyFigureError(title);
-  const made: Figure = {
-    kind: "figure",
-    title,
-    panels: Object.freeze([...panels]),
-    summary: options.summary ?? "",
-    notes: Object.freeze([...(options.notes ?? [])]),
-    numbers: options.numbers,
-  };
+  const made: Figure = { kind: "figure", title, panels, summary, notes, numbers };
   return showing(made, (): Promise<Bundle> => figureBundle(made));
 }

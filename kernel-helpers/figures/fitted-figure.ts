@@ -7,6 +7,8 @@ import { sharedScale } from "./shared-scale.js";
 export interface FittedSeries {
   /** "" for a single series. */
   readonly name: string;
+  /** Its own horizontal axis, where that of the figure does not hold. */
+  readonly x?: Axis;
   readonly observed: RecordedSeries;
   /** Replicate readings of the observed values, drawn hollow. */
   readonly replicates?: RecordedSeries;
@@ -24,7 +26,9 @@ export interface FittedFigureOptions {
 
 /** Observed and fitted values, one panel per series; rival rules differ in dash and colour. */
 export function fittedFigure({ title, x, y, series, notes = [] }: FittedFigureOptions): Figure {
-  const panels = series.map((each): Panel => ({ title: each.name, x, y, layers: seriesLayers(each) }));
+  const panels = series.map(
+    (each): Panel => ({ title: each.name, x: each.x ?? x, y, layers: seriesLayers(each) }),
+  );
   return figure({ title, panels: sharedScale(panels), notes });
 }
 

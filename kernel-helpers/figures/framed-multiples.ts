@@ -1,7 +1,7 @@
 import { type Table, table } from "../tables/index.js";
 import { type Axis, type Figure, figure } from "./figure.js";
 import type { Layer } from "./layer.js";
-import { significant } from "./number-text.js";
+import { placeText } from "./period-places.js";
 import { axisTitle } from "./plot-text.js";
 import { type LineSeries, recordedStyle } from "./recorded-series.js";
 import type { SmallMultiplesOptions, SmallSeries } from "./small-multiples.js";
@@ -37,8 +37,9 @@ export function framedMultiples(
       ({ name, column, row }): Layer => ({ mark: "label", name, x: column + 0.06, y: row + 0.98 }),
     ),
   ];
-  const from = ([least, greatest]: Ends): string => `from ${significant(least)} to ${significant(greatest)}`;
-  const scale = `Axes of every frame: ${axisTitle(x)} ${from(ends.x)} (horizontal), ${axisTitle(y)} ${from(ends.y)} (vertical).`;
+  const range = (axis: Axis, [least, greatest]: Ends): string =>
+    `${axisTitle(axis)} from ${placeText(axis, least)} to ${placeText(axis, greatest)}`;
+  const scale = `Axes of every frame: ${range(x, ends.x)} (horizontal), ${range(y, ends.y)} (vertical).`;
   const bare = { bare: true } as const;
   const panel = {
     title: "",
@@ -82,13 +83,15 @@ function seriesTable(title: string, x: Axis, y: Axis, series: readonly SmallSeri
     title: `Data: ${title}`,
     columns: [
       { key: "name", label: "Series", kind: "text" },
-      { key: "x", label: axisTitle(x), kind: "number", digits: 6, grouped },
+      x.periods
+        ? { key: "x", label: axisTitle(x), kind: "text" }
+        : { key: "x", label: axisTitle(x), kind: "number", digits: 6, grouped },
       { key: "recorded", label: axisTitle(y), kind: "number", digits: 5 },
     ],
     rows: series.flatMap(({ name, recorded }) =>
       Array.from({ length: recorded.x.length }, (_, i) => ({
         name,
-        x: recorded.x[i],
+        x: x.periods ? placeText(x, recorded.x[i]!) : recorded.x[i],
         recorded: recorded.y[i],
       })),
     ),

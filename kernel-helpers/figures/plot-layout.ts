@@ -1,6 +1,7 @@
 import { theme, typeface } from "../tables/index.js";
 import type { Axis, Figure, Panel } from "./figure.js";
 import { type PanelPosition, panelLayout } from "./panel-layout.js";
+import { periodTicks } from "./period-places.js";
 import { panelMarks } from "./plot-marks.js";
 import { axisTitle, plotText } from "./plot-text.js";
 import { axisName, type PlotTrace } from "./plot-traces.js";
@@ -70,8 +71,10 @@ function panelAxes(panel: Panel, at: number, place: PanelPosition, still: boolea
   const long = (name: string): string => name.replace(/^[xy]/, (letter) => `${letter}axis`);
   const across = axisOptions(panel.x, place.columns, still);
   const years = hasYearAxis(panel) ? { separatethousands: false } : {};
+  const ticks = panel.x.bare ? undefined : periodTicks(panel, place.columns);
+  const labelled = ticks && { tickmode: "array", ...ticks };
   return [
-    [long(x), { ...across, ...years, domain: place.x, anchor: y }],
+    [long(x), { ...across, ...years, ...labelled, domain: place.x, anchor: y }],
     [long(y), { ...axisOptions(panel.y, place.rows, still), domain: place.y, anchor: x }],
   ];
 }

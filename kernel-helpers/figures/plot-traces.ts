@@ -2,6 +2,7 @@ import { downsample } from "./downsample.js";
 import type { Panel } from "./figure.js";
 import type { BandLayer, BarsLayer, Layer, LineLayer } from "./layer.js";
 import { type SeriesStyle, seriesStyle, tint } from "./palette.js";
+import { placeText } from "./period-places.js";
 import { plainValues } from "./plain-values.js";
 import { plotText } from "./plot-text.js";
 import { pointsTrace } from "./points-trace.js";
@@ -18,8 +19,21 @@ export function plotTraces(panel: Panel, at: number): PlotTrace[] {
     const style = seriesStyle(layer.style ?? turn);
     const trace = layerTrace(layer, style);
     if (trace === undefined) return [];
-    return [{ ...trace, ...axes, name: plotText(layer.name, 24, 2), showlegend: layer.inLegend !== false }];
+    const name = plotText(layer.name, 24, 2);
+    return [
+      { ...trace, ...labelledHover(panel, trace), ...axes, name, showlegend: layer.inLegend !== false },
+    ];
   });
+}
+
+/** Hover texts with labels of periods instead of positions on the axis. */
+function labelledHover({ x }: Panel, trace: PlotTrace): PlotTrace {
+  const places = trace["x"];
+  if (x.periods === undefined || trace["hoverinfo"] === "skip" || !Array.isArray(places)) return {};
+  const text = places.map((place: unknown) =>
+    typeof place === "number" ? plotText(placeText(x, place), 28) : "",
+  );
+  return { text, hovertemplate: "%{text}, %{y}" };
 }
 
 /** Names of panel axes in the plotting library: "x", "x2", "x3". */

@@ -1,6 +1,7 @@
 import { plural } from "../wording/index.js";
 import { type Axis, type Figure, figure } from "./figure.js";
 import type { Layer, PointsLayer } from "./layer.js";
+import { placeText } from "./period-places.js";
 import { breakAtGaps, type RecordedSeries } from "./recorded-series.js";
 
 /** A recorded value with a finding. */
@@ -47,7 +48,9 @@ export function recordFigure({ title, x, y, series, flagged = [], notes = [] }: 
     x: flagged.map((flag) => flag.x) as PointsLayer["x"],
     y: flagged.map((flag) => flag.y),
   };
-  const reasons = flagged.slice(0, maxListed).map((flag) => `Flagged at ${flag.x}: ${flag.why}`);
+  const reasons = flagged
+    .slice(0, maxListed)
+    .map((flag) => `Flagged at ${x.periods === undefined ? flag.x : placeText(x, flag.x)}: ${flag.why}`);
   if (flagged.length > maxListed)
     reasons.push(`${plural(flagged.length - maxListed, "more flagged value")}.`);
   return figure({

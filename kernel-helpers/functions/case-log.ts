@@ -1,3 +1,5 @@
+import { type Fit, problemOf } from "../../src/estimate/index.js";
+
 /** A file that was read into the case. */
 export interface RecordNote {
   /** As the analyst wrote it. */
@@ -15,38 +17,41 @@ export interface CaseHead {
   readonly seed: number;
 }
 
-interface CaseLog {
-  head: CaseHead | undefined;
+/** A rule that a comparison ruled out on one record. */
+export interface RuledOut {
+  readonly fit: Fit;
+  /** What the comparison calls it. */
+  readonly label: string;
+  /** The rules that the comparison supports; none where it found no rule adequate. */
+  readonly supported: readonly string[];
+}
+
+interface OpenCase {
+  readonly head: CaseHead;
   readonly records: Map<string, RecordNote>;
   readonly steps: string[];
   readonly answers: string[];
-  /** Rule text -> the rule that a comparison of the case supports instead. */
-  readonly rejected: Map<string, string>;
-  readonly forecasts: Set<string>;
+  ruledOut: readonly RuledOut[];
+  readonly forecasts: Fit[];
 }
 
 /** Used, and shown, where no case was opened. */
 export const defaultSeed = 1;
 
-const log: CaseLog = {
-  head: undefined,
-  records: new Map(),
-  steps: [],
-  answers: [],
-  rejected: new Map(),
-  forecasts: new Set(),
-};
+/** The case of the notebook; a kernel runs one. Without `openCase` there is none, and nothing is kept between calls. */
+let opened: OpenCase | undefined;
 
-/** What the commands of one notebook note for its rerun block. One case at a time: a kernel runs one notebook. */
+/** What the functions of one notebook note for its rerun block and its cautions; without an open case, nothing. */
 export const caseLog: {
+  /** Begins afresh, whatever was noted before. */
   open(head: CaseHead): void;
   seed(): number;
   noteRecord(record: RecordNote): void;
   noteStep(step: string): void;
   noteAnswer(sentence: string): void;
-  /** The rules a comparison supports, and those it puts behind them. */
-  noteVerdict(supported: readonly string[], rejected: readonly string[]): void;
-  noteForecast(rule: string): void;
+  /** What a comparison of fits ruled out; it replaces what an earlier one said of the same rules on the same record. */
+  noteVerdict(compared: readonly Fit[], ruledOut: readonly RuledOut[]): void;
+  noteForecast(fit: Fit): void;
   /** What a reader of the answer must know of the rules it rests on. */
   cautions(): readonly string[];
   head(): CaseHead | undefined;
@@ -55,39 +60,62 @@ export const caseLog: {
   answers(): readonly string[];
 } = {
   open: (head) => {
-    log.head = head;
-    log.steps.length = 0;
-    log.answers.length = 0;
-    log.rejected.clear();
-    log.forecasts.clear();
+    opened = { head, records: new Map(), steps: [], answers: [], ruledOut: [], forecasts: [] };
   },
-  seed: () => log.head?.seed ?? defaultSeed,
+  seed: () => opened?.head.seed ?? defaultSeed,
   noteRecord: (record) => {
-    log.records.set(record.path, record);
+    opened?.records.set(record.path, record);
   },
   noteStep: (step) => {
-    if (!log.steps.includes(step)) log.steps.push(step);
+    if (opened?.steps.includes(step) === false) opened.steps.push(step);
   },
   noteAnswer: (sentence) => {
-    log.answers.push(sentence);
+    opened?.answers.push(sentence);
   },
-  noteVerdict: (supported, rejected) => {
-    for (const rule of supported) log.rejected.delete(rule);
-    for (const rule of rejected) log.rejected.set(rule, supported[0] ?? "");
+  noteVerdict: (compared, ruledOut) => {
+    if (opened === undefined) return;
+    const before = opened.ruledOut.filter(({ fit }) => !compared.some((each) => isSameModel(each, fit)));
+    opened.ruledOut = [...before, ...ruledOut];
   },
-  noteForecast: (rule) => {
-    log.forecasts.add(rule);
+  noteForecast: (fit) => {
+    if (opened?.forecasts.includes(fit) === false) opened.forecasts.push(fit);
   },
-  cautions: () => {
-    const used = [...log.forecasts];
-    if (used.some((rule) => !log.rejected.has(rule))) return [];
-    return used.map(
-      (rule) =>
-        `The answer rests on "${rule}", which the comparison in this case puts behind "${log.rejected.get(rule)}".`,
-    );
-  },
-  head: () => log.head,
-  records: () => [...log.records.values()],
-  steps: () => log.steps,
-  answers: () => log.answers,
+  cautions: () => (opened === undefined ? [] : cautionsOf(opened)),
+  head: () => opened?.head,
+  records: () => [...(opened?.records.values() ?? [])],
+  steps: () => opened?.steps ?? [],
+  answers: () => opened?.answers ?? [],
 };
+
+/** A record whose forecasts all rest on rules that a comparison on it ruled out; one that stands is enough for it. */
+function cautionsOf({ forecasts, ruledOut }: OpenCase): readonly string[] {
+  const records = new Set(forecasts.map(recordOf));
+  return [...records].flatMap((record) => {
+    const used = forecasts.filter((fit) => recordOf(fit) === record);
+    const found = used.map((fit) => ruledOut.find((each) => isSameModel(each.fit, fit)));
+    return found.includes(undefined) ? [] : [...new Set(found.map((each) => cautionOf(each!)))];
+  });
+}
+
+function cautionOf({ label, supported }: RuledOut): string {
+  const instead =
+    supported.length === 0
+      ? "found no rule adequate"
+      : `supports ${supported.map((each) => `"${each}"`).join(" and ")} instead`;
+  return `The answer rests on "${label}", but the comparison on the same record ${instead}.`;
+}
+
+/** The periods of a record are the same list in every fit to it, also where its state goes by the rule's name. */
+const recordOf = ({ observations }: Fit): object => observations.groups[0]!.time;
+
+/** The same rule with the same kind of errors on the same record, though it may have been fitted twice. */
+function isSameModel(one: Fit, other: Fit): boolean {
+  const [a, b] = [problemOf(one), problemOf(other)];
+  return (
+    recordOf(one) === recordOf(other) &&
+    one.rule.text === other.rule.text &&
+    a.errors === b.errors &&
+    a.distribution === b.distribution &&
+    a.groups === b.groups
+  );
+}

@@ -1,16 +1,21 @@
 import {
-  type ChangePoint,
   type ChangePointOptions,
   type DensityDependence,
   type DensityOptions,
+  type ChangePoint as EngineChangePoint,
   changePoint as findChangePoint,
   densityDependence as testDensity,
 } from "../../src/evidence/index.js";
+import { frozenCopy } from "../../src/numeric/index.js";
 import type { Observations } from "../../src/record/index.js";
-import type { Rule } from "../../src/rule/index.js";
+import { type Rule, ruleLabel } from "../../src/rule/index.js";
 import { type Figure, figure, type Panel } from "../figures/index.js";
+import type { ChangePoint } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
+import { acrossGroup, periodColumn } from "./across-periods.js";
 import { caseLog } from "./case-log.js";
+import { cautionsByGroup } from "./cautions-by-group.js";
+import { presentFitIn } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
 
 /**
@@ -26,9 +31,9 @@ export function changePoint(
   observations: Observations,
   options: ChangePointOptions = {},
 ): ChangePoint {
-  const looked = findChangePoint(rule, observations, { seed: caseLog.seed(), ...options });
-  caseLog.noteStep(`looked for a break in "${rule.text}": ${looked.sentence}`);
-  return showing({ ...looked }, () => shownTogether([breaksTable(looked), breaksFigure(looked)]));
+  const looked = findChangePoint(rule, observations, { seed: caseLog.seed(), ...frozenCopy(options) });
+  caseLog.noteStep(`looked for a break in "${ruleLabel(rule)}": ${looked.sentence}`);
+  return showing(presentFitIn(looked), () => shownTogether([breaksTable(looked), breaksFigure(looked)]));
 }
 
 /**
@@ -42,22 +47,21 @@ export function densityDependence(
   observations: Observations,
   options: DensityOptions = {},
 ): DensityDependence {
-  const tested = testDensity(observations, { seed: caseLog.seed(), ...options });
+  const tested = testDensity(observations, { seed: caseLog.seed(), ...frozenCopy(options) });
   caseLog.noteStep(`tested density dependence: ${tested.sentence}`);
-  return showing({ ...tested }, () => shownTogether([densityTable(tested)]));
+  return showing(tested, () => shownTogether([densityTable(tested)]));
 }
 
-function breaksTable(looked: ChangePoint): Table {
-  const { period } = looked.fit.observations;
-  const date = { kind: "number", digits: 6, unit: period.unit, grouped: false } as const;
+function breaksTable(looked: EngineChangePoint): Table {
+  const { axis } = looked.fit.observations;
   const percent = Math.round(100 * looked.level);
   return table({
-    title: `One change in the parameters of ${looked.fit.rule.text}`,
+    title: `One change in the parameters of ${ruleLabel(looked.fit.rule)}`,
     columns: [
       ...(looked.groups.length > 1 ? [{ key: "group", label: "Group", kind: "text" } as const] : []),
-      { key: "date", label: "Likeliest date", ...date },
-      { key: "earliest", label: `${percent}% interval, from`, ...date },
-      { key: "latest", label: "to", ...date },
+      periodColumn("date", "Likeliest date", axis),
+      periodColumn("earliest", `${percent}% interval, from`, axis),
+      periodColumn("latest", "to", axis),
       { key: "statistic", label: "Largest F", kind: "number", digits: 3 },
       { key: "probability", label: "By chance", kind: "probability", pairedWith: "probabilityError" },
       { key: "name", label: "Parameter", kind: "text" },
@@ -67,6 +71,7 @@ function breaksTable(looked: ChangePoint): Table {
     rows: looked.groups.flatMap((group) =>
       Object.keys(group.before.parameters).map((name) => ({
         ...group,
+        ...(axis.counts !== "numbers" && group.labels),
         name,
         before: group.before.parameters[name],
         after: group.after.parameters[name],
@@ -74,17 +79,18 @@ function breaksTable(looked: ChangePoint): Table {
     ),
     notes: [
       looked.sentence,
+      ...cautionsByGroup([{ group: "", warnings: looked.fit.warnings }]),
       `Held against the largest F of ${looked.resamples} records drawn without a break; an F table would call a break far too often.`,
     ],
   });
 }
 
-function breaksFigure(looked: ChangePoint): Figure {
+function breaksFigure(looked: EngineChangePoint): Figure {
   const { observations, rule } = looked.fit;
-  const x = { title: observations.period.column, unit: observations.period.unit };
   const panels = looked.groups.flatMap((group): Panel[] => {
     const recorded = observations.groups.find((each) => each.name === group.group)!;
     const [state] = observations.states;
+    const x = acrossGroup(recorded);
     const marks = [
       { mark: "vertical", name: "likeliest date", x: group.date } as const,
       { mark: "vertical", name: "earliest", x: group.earliest, inLegend: false } as const,
@@ -116,7 +122,7 @@ function breaksFigure(looked: ChangePoint): Figure {
     ];
   });
   return figure({
-    title: `When the parameters of ${rule.text} may have changed`,
+    title: `When the parameters of ${ruleLabel(rule)} may have changed`,
     panels,
     summary: looked.sentence,
   });

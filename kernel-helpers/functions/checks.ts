@@ -1,8 +1,13 @@
 import type { Fit } from "../../src/estimate/index.js";
-import { type Check, type CheckOptions, check as checkFit } from "../../src/evidence/index.js";
+import { type CheckOptions, check as checkFit, type Check as EngineCheck } from "../../src/evidence/index.js";
+import { frozenCopy } from "../../src/numeric/index.js";
+import { ruleLabel } from "../../src/rule/index.js";
+import type { Check } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
+import { periodColumn } from "./across-periods.js";
 import { caseLog } from "./case-log.js";
 import { residualPanels } from "./residual-panels.js";
+import { presentFitIn } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
 
 /**
@@ -14,27 +19,27 @@ import { shownTogether } from "./shown-together.js";
  * @example check(fit(crowding, counts, { errors: "observation" })).sentence;
  */
 export function check(fit: Fit, options: CheckOptions = {}): Check {
-  const checked = checkFit(fit, { seed: caseLog.seed(), ...options });
-  caseLog.noteStep(`checked "${fit.rule.text}": ${checked.sentence}`);
-  return showing({ ...checked }, () =>
+  const checked = checkFit(fit, { seed: caseLog.seed(), ...frozenCopy(options) });
+  caseLog.noteStep(`checked "${ruleLabel(fit.rule)}": ${checked.sentence}`);
+  return showing(presentFitIn(checked), () =>
     shownTogether([
       testsTable(checked),
-      ...residualPanels(fit),
-      recoveryTable(checked),
-      windowsTable(checked),
+      ...residualPanels(fit, checked.options.seed),
+      ...(checked.groups.some(({ recovery }) => recovery) ? [recoveryTable(checked)] : []),
+      ...(checked.groups.some(({ windows }) => windows.length > 0) ? [windowsTable(checked)] : []),
     ]),
   );
 }
 
-const groupColumn = (checked: Check): readonly { key: string; label: string; kind: "text" }[] =>
+const groupColumn = (checked: EngineCheck): readonly { key: string; label: string; kind: "text" }[] =>
   checked.groups.length > 1 ? [{ key: "group", label: "Group", kind: "text" }] : [];
 
-const stateColumn = (checked: Check): readonly { key: string; label: string; kind: "text" }[] =>
+const stateColumn = (checked: EngineCheck): readonly { key: string; label: string; kind: "text" }[] =>
   checked.fit.rule.states.length > 1 ? [{ key: "state", label: "State", kind: "text" }] : [];
 
-function testsTable(checked: Check): Table {
+function testsTable(checked: EngineCheck): Table {
   return table({
-    title: `Residuals of ${checked.fit.rule.text}`,
+    title: `Residuals of ${ruleLabel(checked.fit.rule)}`,
     columns: [
       ...groupColumn(checked),
       ...stateColumn(checked),
@@ -62,7 +67,7 @@ function testsTable(checked: Check): Table {
   });
 }
 
-function recoveryTable(checked: Check): Table {
+function recoveryTable(checked: EngineCheck): Table {
   const { resamples: refits, seed } = checked.options;
   const level = Math.round(100 * (checked.groups[0]?.recovery?.level ?? 0.95));
   const failed = checked.groups.reduce((sum, group) => sum + (group.recovery?.failed ?? 0), 0);
@@ -92,15 +97,15 @@ function recoveryTable(checked: Check): Table {
   });
 }
 
-function windowsTable(checked: Check): Table {
-  const { period } = checked.fit.observations;
+function windowsTable(checked: EngineCheck): Table {
+  const { axis } = checked.fit.observations;
   return table({
     title: "Estimates from parts of the record",
     columns: [
       ...groupColumn(checked),
       { key: "part", label: "Part", kind: "text" },
-      { key: "from", label: `${period.column}, from`, unit: period.unit, kind: "number", digits: 6 },
-      { key: "to", label: "to", unit: period.unit, kind: "number", digits: 6 },
+      periodColumn("from", `${axis.column}, from`, axis),
+      periodColumn("to", "to", axis),
       { key: "name", label: "Parameter", kind: "text" },
       { key: "value", label: "Estimate", kind: "number", digits: 4 },
       { key: "shift", label: "Moved by standard errors", kind: "number", digits: 2 },
@@ -110,8 +115,8 @@ function windowsTable(checked: Check): Table {
         window.estimates.map((estimate) => ({
           group: group.group,
           part: window.name,
-          from: window.from,
-          to: window.to,
+          from: axis.counts === "numbers" ? window.from : window.periods[0],
+          to: axis.counts === "numbers" ? window.to : window.periods[1],
           ...estimate,
           shift: estimate.shift ?? "not determined",
         })),

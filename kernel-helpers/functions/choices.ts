@@ -10,6 +10,7 @@ import {
   tradeoff as tradeoffOf,
 } from "../../src/decision/index.js";
 import type { Fit } from "../../src/estimate/index.js";
+import { frozenCopy } from "../../src/numeric/index.js";
 import type { Rule } from "../../src/rule/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
@@ -26,25 +27,25 @@ import { shownTogether } from "./shown-together.js";
  *   maximize: { level: "catch", at: 100 } }).atEnd // false
  */
 export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum {
-  const found = bestSetting(subject, { seed: caseLog.seed(), ...options });
+  const found = bestSetting(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
   caseLog.noteStep(`asked which ${found.vary} is best for ${found.measure}`);
-  return showing({ ...found }, () => shownTogether(showBest(found)));
+  return showing(found, () => shownTogether(showBest(found)));
 }
 
 /**
- * What an answer hangs on: its change for one standard error and for ten per cent of each parameter, in two charts,
+ * What an answer is sensitive to: its change for one standard error and for ten per cent of each parameter, in two charts,
  * and the elasticities.
  *
- * @example sensitivity(fitted, { periods: 12, answer: { time: "N", value: 600, direction: "rising" } }).rows.length // 3
+ * @example sensitivity(fitted, { periods: 12, answer: { time: "N", risesTo: 600 } }).rows.length // 3
  */
 export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): Sensitivity {
-  const found = sensitivityOf(subject, { seed: caseLog.seed(), ...options });
-  caseLog.noteStep(`asked what ${found.measure} hangs on`);
-  return showing({ ...found }, () => shownTogether(showSensitivity(found)));
+  const found = sensitivityOf(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
+  caseLog.noteStep(`asked how sensitive ${found.measure} is`);
+  return showing(found, () => shownTogether(showSensitivity(found)));
 }
 
 /**
- * Time, level, cost and risk of several settings, side by side; the result shows a table and a curve for each answer.
+ * Time, level, cost and probability of several settings, side by side; the result shows a table and a curve for each answer.
  *
  * @example
  * const stock = recurrence("stock[t+1] = stock + ordered - 10");
@@ -52,7 +53,7 @@ export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): S
  *   answers: { lowest: { lowest: "stock" } } }).rows[0].answers.lowest // 12
  */
 export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeoff {
-  const found = tradeoffOf(subject, { seed: caseLog.seed(), ...options });
+  const found = tradeoffOf(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
   caseLog.noteStep(`set ${found.rows.length} choices of ${found.vary} side by side`);
-  return showing({ ...found }, () => shownTogether(showTradeoff(found)));
+  return showing(found, () => shownTogether(showTradeoff(found)));
 }

@@ -1,12 +1,9 @@
-import type { Fit } from "../../src/estimate/index.js";
-import {
-  type CompareOptions,
-  type Comparison,
-  compare as compareFits,
-  type RollingOrigin,
-} from "../../src/evidence/index.js";
+import { type Comparison, compare as compareFits, type RollingOrigin } from "../../src/evidence/index.js";
+import { frozenCopy } from "../../src/numeric/index.js";
+import type { CompareOptions, Fit } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { ruleNotes } from "./rule-title.js";
 import { shownTogether } from "./shown-together.js";
 
 /**
@@ -16,26 +13,31 @@ import { shownTogether } from "./shown-together.js";
  * @example compare([crowdingFit, shelteredFit]).sentence;
  */
 export function compare(fits: readonly Fit[], options: CompareOptions = {}): Comparison {
-  const compared = compareFits(fits, options);
+  const { decide, ...others } = frozenCopy(options);
+  // The fits handed to `decide` are those given here, with their estimates by name.
+  const compared = compareFits(fits, { ...others, ...(decide && { decide: (fit) => decide(fit as Fit) }) });
   caseLog.noteStep(`compared: ${compared.sentence}`);
-  const { kind, rules } = compared.verdict;
-  const others = compared.rows.map((row) => row.rule).filter((rule) => !rules.includes(rule));
-  if (kind === "supported" || kind === "undecided") caseLog.noteVerdict(rules, others);
-  return showing({ ...compared }, () =>
+  const { rules: supported } = compared.verdict;
+  const ruledOut = compared.rows.filter(({ rule }) => !supported.includes(rule));
+  caseLog.noteVerdict(
+    fits,
+    ruledOut.map(({ place, rule }) => ({ fit: fits[place]!, label: rule, supported })),
+  );
+  return showing(compared, () =>
     shownTogether([
-      comparisonTable(compared),
+      comparisonTable(compared, fits),
       compared.decisions.length > 0 ? decisionsTable(compared) : undefined,
       compared.rollingOrigin && forecastsTable(compared.rollingOrigin, fits),
     ]),
   );
 }
 
-function comparisonTable(compared: Comparison): Table {
+function comparisonTable(compared: Comparison, fits: readonly Fit[]): Table {
   return table({
     title: "Rival rules on one record",
     columns: [
       { key: "rule", label: "Rule", kind: "text" },
-      { key: "unknowns", label: "Unknowns", kind: "integer" },
+      { key: "parameters", label: "Unknowns", kind: "integer" },
       { key: "count", label: "Residuals", kind: "integer" },
       { key: "aicCorrected", label: "AICc", kind: "number", digits: 5 },
       { key: "difference", label: "Above the lowest", kind: "number", digits: 3 },
@@ -45,6 +47,7 @@ function comparisonTable(compared: Comparison): Table {
     rows: compared.rows.map((row) => ({ ...row, determined: row.undetermined ? "not all" : "all" })),
     notes: [
       compared.sentence,
+      ...ruleNotes(fits.map(({ rule }) => rule)),
       ...compared.likelihoodRatios.map((ratio) => `${ratio.sentence.replace(/\.$/, "")}.`),
       ...compared.notes,
     ],

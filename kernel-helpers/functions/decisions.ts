@@ -6,27 +6,28 @@ import {
   type Solved,
   type SolveOptions,
   solveFor as solveForSetting,
-  type TimeToReach,
   type TimeToReachOptions,
 } from "../../src/decision/index.js";
 import type { Fit } from "../../src/estimate/index.js";
+import { frozenCopy } from "../../src/numeric/index.js";
 import type { Forecast, Simulation } from "../../src/projection/index.js";
 import type { Rule } from "../../src/rule/index.js";
+import { type TimeToReach, withSingleReach } from "../results/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
-import { showNextReading, showReach, showSolved } from "./show-decisions.js";
+import { levelWords, showNextReading, showReach, showSolved } from "./show-decisions.js";
 import { shownTogether } from "./shown-together.js";
 
 /**
  * When a projected state first reaches a value; the result shows time, margin, first recorded period, the
  * distribution over periods and the probability of never, and says it in a sentence.
  *
- * @example timeToReach(ahead, { state: "N", value: 120, direction: "rising" }).sentence;
+ * @example timeToReach(ahead, { state: "N", risesTo: 120 }).sentence;
  */
 export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOptions): TimeToReach {
-  const found = reachesValue(ahead, options);
-  caseLog.noteStep(`asked when ${found.state} reaches ${found.value} ${found.unit}, ${found.direction}`);
-  return showing({ ...found }, () => shownTogether(showReach(found, ahead)));
+  const found = withSingleReach(reachesValue(ahead, frozenCopy(options)));
+  caseLog.noteStep(`asked when ${found.state} ${levelWords(found)}`);
+  return showing(found, () => shownTogether(showReach(found, ahead)));
 }
 
 /**
@@ -39,9 +40,15 @@ export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOp
  *   until: { level: "owed", at: 12, is: 0 } }).solutions[0].value // 1000*0.01/(1 - 1.01**-12)
  */
 export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
-  const found = solveForSetting(subject, { seed: caseLog.seed(), ...options });
-  caseLog.noteStep(`asked what ${found.vary} brings ${found.measure} to its target`);
-  return showing({ ...found }, () => shownTogether(showSolved(found)));
+  const found = solveForSetting(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
+  caseLog.noteStep(`asked what ${found.vary} brings ${found.measure} ${aimWords(found)}`);
+  return showing(found, () => shownTogether(showSolved(found)));
+}
+
+/** "to 0", "to at most 120": the target that was asked for. */
+function aimWords({ target }: Solved): string {
+  if (target.is !== undefined) return `to ${target.is}`;
+  return target.atMost === undefined ? `to at least ${target.atLeast}` : `to at most ${target.atMost}`;
 }
 
 /**
@@ -51,7 +58,7 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
  * @example nextReading(fitted, { periods: 10, answer: { parameter: "K" } }).sentence;
  */
 export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOptions): NextReading {
-  const found = nextReadingOf(fits, { seed: caseLog.seed(), ...options });
+  const found = nextReadingOf(fits, { seed: caseLog.seed(), ...frozenCopy(options) });
   caseLog.noteStep(`asked which further reading of ${found.state} would ${found.purpose}`);
-  return showing({ ...found }, () => shownTogether(showNextReading(found)));
+  return showing(found, () => shownTogether(showNextReading(found)));
 }

@@ -31,15 +31,28 @@ export function findingsList(findings: readonly Finding[]): object | undefined {
 
 /** "25 rows read, 24 used, 2 flagged, 0 corrected, 1 settled by an option, 1 refused." */
 export function countsSentence({ counts }: Observations): string {
-  const { read, used, flagged, corrected, settled = 0, refused } = counts;
+  const { aside = 0, read, used, flagged, corrected, settled = 0, refused } = counts;
+  const others = aside > 0 ? `${aside} rows not chosen; ` : "";
   const byOption = settled > 0 ? ` ${settled} settled by an option,` : "";
-  return `${read} rows read, ${used} used, ${flagged} flagged, ${corrected - settled} corrected,${byOption} ${refused} refused.`;
+  return `${others}${read} rows read, ${used} used, ${flagged} flagged, ${corrected - settled} corrected,${byOption} ${refused} refused.`;
+}
+
+/** "each value is a level", or what each column is where they differ. */
+function measuredWords({ states, flows = [] }: Observations): string {
+  const [first] = states;
+  if (flows.length === 0 && states.every(({ measured }) => measured === first!.measured))
+    return `each value is a ${first!.measured}`;
+  const told = [
+    ...states.map(({ name, measured }) => `${name} is a ${measured}`),
+    ...flows.map((name) => `${name} is a flow`),
+  ];
+  return told.join(", ");
 }
 
 /** Period, step, whether levels or flows, and the order of events, in one line. */
 export function periodSentence(observations: Observations): string {
-  const { column, step, calendar } = observations.period;
+  const { column, step, calendar } = observations.axis;
   const counted = calendar ?? (step.every === 1 ? `1 ${step.of}` : `${step.every} ${step.of}s`);
   const order = observations.order === "" ? "not stated" : observations.order;
-  return `Period "${column}", one step is ${counted}; each value is a ${observations.measured}; order of events: ${order}.`;
+  return `Period "${column}", one step is ${counted}; ${measuredWords(observations)}; order of events: ${order}.`;
 }

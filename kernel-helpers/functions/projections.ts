@@ -1,16 +1,22 @@
 import type { Fit } from "../../src/estimate/index.js";
+import { frozenCopy } from "../../src/numeric/index.js";
 import {
-  type Forecast,
   type ForecastOptions,
   forecast as forecastFit,
   type SimulateOptions,
-  type Simulation,
   simulate as simulateRule,
 } from "../../src/projection/index.js";
-import type { Rule } from "../../src/rule/index.js";
+import { type Rule, ruleLabel } from "../../src/rule/index.js";
 import { withProgress } from "../progress/index.js";
+import {
+  type Forecast,
+  forecastWithValues,
+  type Simulation,
+  simulationWithValues,
+} from "../results/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { presentFit } from "./show-fit.js";
 import { showForecast } from "./show-forecast.js";
 import { showSimulation } from "./show-simulation.js";
 import { shownTogether } from "./shown-together.js";
@@ -24,13 +30,14 @@ import { shownTogether } from "./shown-together.js";
  */
 export function forecast(fit: Fit, options: ForecastOptions): Forecast {
   const ahead = withProgress("Forecast", undefined, ({ at }) =>
-    forecastFit(fit, { seed: caseLog.seed(), onProgress: at, ...options }),
+    forecastFit(fit, { seed: caseLog.seed(), onProgress: at, ...frozenCopy(options) }),
   );
   caseLog.noteStep(
-    `forecast "${fit.rule.text}" over ${options.periods} periods, ${ahead.options.paths} paths`,
+    `forecast "${ruleLabel(fit.rule)}" over ${options.periods} periods, ${ahead.options.paths} paths`,
   );
-  caseLog.noteForecast(fit.rule.text);
-  return showing({ ...ahead }, () => shownTogether(showForecast(ahead)));
+  caseLog.noteForecast(fit);
+  presentFit(ahead.fit);
+  return showing(forecastWithValues(ahead), () => shownTogether(showForecast(ahead)));
 }
 
 /**
@@ -43,8 +50,10 @@ export function forecast(fit: Fit, options: ForecastOptions): Forecast {
  */
 export function simulate(rule: Rule, options: SimulateOptions): Simulation {
   const run = withProgress("Simulation", undefined, ({ at }) =>
-    simulateRule(rule, { seed: caseLog.seed(), onProgress: at, ...options }),
+    simulateRule(rule, { seed: caseLog.seed(), onProgress: at, ...frozenCopy(options) }),
   );
-  caseLog.noteStep(`simulated "${rule.text}" over ${options.periods} periods, ${run.options.paths} paths`);
-  return showing({ ...run }, () => shownTogether(showSimulation(run)));
+  caseLog.noteStep(
+    `simulated "${ruleLabel(rule)}" over ${options.periods} periods, ${run.options.paths} paths`,
+  );
+  return showing(simulationWithValues(run), () => shownTogether(showSimulation(run)));
 }

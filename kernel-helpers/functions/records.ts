@@ -1,12 +1,13 @@
 import type { DataFrame } from "danfojs-node";
+import { freezeDeep, frozenCopy } from "../../src/numeric/index.js";
 import {
   type ColumnTable,
   type Decision,
   type DifferenceOptions,
   type Differences,
   differences as differencesOf,
+  type Observations as EngineObservations,
   type ObservationOptions,
-  type Observations,
   observations as observe,
   tableOfRows,
 } from "../../src/record/index.js";
@@ -14,6 +15,7 @@ import {
   holdsSeveralTables,
   type NamedTable,
   type ReadOptions,
+  type RecordSource,
   readTable,
   type WriteOptions,
   writeTables,
@@ -29,11 +31,12 @@ import {
   toFrame,
   withCorrectionColumns,
 } from "../dataframe/index.js";
+import type { Observations } from "../results/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { decisionRows, decisionSentence } from "./decisions-table.js";
 import { differencesBundle } from "./show-differences.js";
-import { observationsBundle } from "./show-observations.js";
+import { presentObservations } from "./show-observations.js";
 
 /**
  * Reads a record: a text file with delimiters, a workbook, Parquet, JSON, or a table of a database file.
@@ -50,9 +53,10 @@ import { observationsBundle } from "./show-observations.js";
 export async function readRecord(path: string, options: ReadOptions = {}): Promise<DataFrame> {
   const table = await readTable(path, options);
   const frame = toFrame(table);
-  const found = Object.freeze([...table.source.found, ...correctionNotes(table.names)]);
-  attachNotes(frame, { ...frameNotes(frame), source: Object.freeze({ ...table.source, found }) });
-  caseLog.noteRecord({ path, rows: table.source.rows, checksum: table.source.checksum });
+  const found = [...table.source.found, ...correctionNotes(table.names)];
+  const source = freezeDeep({ ...table.source, found });
+  attachNotes(frame, { ...frameNotes(frame), source });
+  noteSource(source);
   return frame;
 }
 
@@ -104,9 +108,11 @@ function withDecisions(
  */
 export function observations(record: RecordLike, options: ObservationOptions): Observations {
   const table = columnsOf(record);
-  const made = { ...observe(table, options) };
+  const made = presentObservations(observe(table, frozenCopy(options)));
+  const { source } = frameNotes(record);
+  if (source !== undefined) noteSource(source);
   noteObservations(made, table.decisions ?? []);
-  return showing(made, () => observationsBundle(made));
+  return made;
 }
 
 /**
@@ -114,19 +120,24 @@ export function observations(record: RecordLike, options: ObservationOptions): O
  *
  * @example differences(counts, { per: "log" });
  */
-export function differences(record: Observations, options: DifferenceOptions = {}): Differences {
-  const made = { ...differencesOf(record, options) };
+export function differences(record: EngineObservations, options: DifferenceOptions = {}): Differences {
+  const made = differencesOf(record, frozenCopy(options));
   return showing(made, () => differencesBundle(made));
+}
+
+/** For the rerun block: the file behind a record, which may have been read before the case was opened. */
+function noteSource({ path, rows, checksum }: RecordSource): void {
+  caseLog.noteRecord({ path, rows, checksum });
 }
 
 /** For the rerun block: how the record was read, and each choice of the options that changed a value. */
 function noteObservations(
-  { states, period, decisions = [] }: Observations,
+  { states, axis, decisions = [] }: EngineObservations,
   known: readonly Decision[],
 ): void {
   const names = states.map(({ column }) => `"${column}"`).join(", ");
   caseLog.noteStep(
-    `observations of ${names} by "${period.column}" in steps of ${period.calendar ?? `${period.step.every} ${period.step.of}`}`,
+    `observations of ${names} by "${axis.column}" in steps of ${axis.calendar ?? `${axis.step.every} ${axis.step.of}`}`,
   );
   for (const decision of decisions)
     if (!known.includes(decision)) caseLog.noteStep(`decision: ${decisionSentence(decision)}`);

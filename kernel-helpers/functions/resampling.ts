@@ -2,17 +2,21 @@ import {
   type Bootstrap,
   type BootstrapOptions,
   bootstrap as bootstrapFit,
+  type UpdatedFit as EngineUpdatedFit,
   updateFit as extendFit,
   type Fit,
   type GridIntervalOptions,
   gridInterval as gridIntervalOf,
   type Interval,
-  type UpdatedFit,
 } from "../../src/estimate/index.js";
+import { frozenCopy } from "../../src/numeric/index.js";
 import type { Observations } from "../../src/record/index.js";
+import { ruleLabel } from "../../src/rule/index.js";
 import { withProgress } from "../progress/index.js";
+import type { UpdatedFit } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { presentFitIn } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
 
 /**
@@ -24,16 +28,16 @@ import { shownTogether } from "./shown-together.js";
  */
 export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
   const drawn = withProgress("Refits", undefined, ({ at }) =>
-    bootstrapFit(fit, { seed: caseLog.seed(), onProgress: at, ...options }),
+    bootstrapFit(fit, { seed: caseLog.seed(), onProgress: at, ...frozenCopy(options) }),
   );
-  caseLog.noteStep(`bootstrap of "${fit.rule.text}" by ${drawn.errors} errors, ${drawn.used} refits`);
-  return showing({ ...drawn }, () => shownTogether([bootstrapTable(fit, drawn)]));
+  caseLog.noteStep(`bootstrap of "${ruleLabel(fit.rule)}" by ${drawn.errors} errors, ${drawn.used} refits`);
+  return showing(drawn, () => shownTogether([bootstrapTable(fit, drawn)]));
 }
 
 function bootstrapTable(fit: Fit, drawn: Bootstrap): Table {
   const percent = `${100 * (drawn.rows[0]?.interval.level ?? 0.95)}%`;
   return table({
-    title: `Estimates of ${fit.rule.text} over simulated records`,
+    title: `Estimates of ${ruleLabel(fit.rule)} over simulated records`,
     columns: [
       ...(fit.groups.length > 1 ? [{ key: "group", label: "Group", kind: "text" } as const] : []),
       { key: "name", label: "Parameter", kind: "text" },
@@ -67,9 +71,9 @@ function bootstrapTable(fit: Fit, drawn: Bootstrap): Table {
  * @example gridInterval(fit(crowding, counts, { errors: "process" }), "K", { resamples: 49 }).kind; // "grid"
  */
 export function gridInterval(fit: Fit, name: string, options: GridIntervalOptions = {}): Interval {
-  const interval = gridIntervalOf(fit, name, { seed: caseLog.seed(), ...options });
-  caseLog.noteStep(`interval of ${name} in "${fit.rule.text}" by simulation at every value`);
-  return showing({ ...interval }, () => shownTogether([intervalTable(name, interval)]));
+  const interval = gridIntervalOf(fit, name, { seed: caseLog.seed(), ...frozenCopy(options) });
+  caseLog.noteStep(`interval of ${name} in "${ruleLabel(fit.rule)}" by simulation at every value`);
+  return showing(interval, () => shownTogether([intervalTable(name, interval)]));
 }
 
 function intervalTable(name: string, { level, lower, upper, note }: Interval): Table {
@@ -95,14 +99,14 @@ function intervalTable(name: string, { level, lower, upper, note }: Interval): T
 export function updateFit(before: Fit, later: Observations): UpdatedFit {
   const extended = extendFit(before, later);
   const added = Object.values(extended.added).reduce((sum, count) => sum + count, 0);
-  caseLog.noteStep(`"${before.rule.text}" fitted again with ${added} later rows`);
-  return showing({ ...extended }, () => shownTogether([changesTable(before, extended)]));
+  caseLog.noteStep(`"${ruleLabel(before.rule)}" fitted again with ${added} later rows`);
+  return showing(presentFitIn(extended), () => shownTogether([changesTable(before, extended)]));
 }
 
-function changesTable(before: Fit, { changes, added, remarks }: UpdatedFit): Table {
+function changesTable(before: Fit, { changes, added, remarks }: EngineUpdatedFit): Table {
   const rows = Object.entries(added).map(([group, count]) => `${count} rows added${group && ` to ${group}`}`);
   return table({
-    title: `What later rows changed in ${before.rule.text}`,
+    title: `What later rows changed in ${ruleLabel(before.rule)}`,
     columns: [
       ...(before.groups.length > 1 ? [{ key: "group", label: "Group", kind: "text" } as const] : []),
       { key: "name", label: "Parameter", kind: "text" },

@@ -7,12 +7,10 @@ import {
 } from "../../src/rule/index.js";
 import { showing } from "../tables/index.js";
 import { catalogueTable } from "./catalogue-table.js";
-import { showRule } from "./show-rule.js";
+import { presentRule } from "./show-rule.js";
 import { shownTogether } from "./shown-together.js";
 
 export type { RecurrenceOptions, Rule, RuleCatalogue } from "../../src/rule/index.js";
-
-const shown = (rule: Rule): Rule => showing({ ...rule }, () => showRule(rule));
 
 /**
  * Reads a rule of change from text, one line a quantity in the order of events; the result shows its lines, its
@@ -22,14 +20,14 @@ const shown = (rule: Rule): Rule => showing({ ...rule }, () => showRule(rule));
  * @example recurrence("ΔN = r*N*(1 - N/K)").parameters; // ["r", "K"]
  */
 export function recurrence(text: string, options: RecurrenceOptions = {}): Rule {
-  return shown(readRule(text, options));
+  return presentRule(readRule(text, options));
 }
 
 /** Wraps one maker of the catalogue so that its rule shows itself. */
 const showingItself =
   <Options extends readonly unknown[]>(make: (...options: Options) => Rule) =>
   (...options: Options): Rule =>
-    shown(make(...options));
+    presentRule(make(...options));
 
 /**
  * The catalogue: rules that have a name. Each is called for its rule, which shows its range, rest levels, slopes,

@@ -1,38 +1,49 @@
 import {
-  amount,
   type GroupReach,
   type NextReading,
+  reachedLevel,
   type Solved,
   type TimeToReach,
 } from "../../src/decision/index.js";
-import type { Forecast, Simulation } from "../../src/projection/index.js";
+import { type Forecast, levelSide, type Simulation } from "../../src/projection/index.js";
+import type { PeriodAxis } from "../../src/record/index.js";
 import { type Figure, figure } from "../figures/index.js";
+import { groupName } from "../results/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
+import { acrossPeriods, acrossRecord, periodCell, periodColumn } from "./across-periods.js";
 import { ruleTitle } from "./rule-title.js";
-import { decidingFan, projectedName } from "./show-forecast.js";
+import { decidingFan } from "./show-forecast.js";
 
 const percent = (level: number): string => `${Number((100 * level).toPrecision(12))}%`;
 
-/** The answer to "when": a table of groups, and the distribution over periods where chance has a part. */
-export function showReach(found: TimeToReach, ahead: Forecast | Simulation): readonly (Table | Figure)[] {
-  const figures = found.groups.some((group) => group.distribution.length > 1) ? [reachFigure(found)] : [];
-  const name = `the level ${amountWords(found)}`;
-  const fans =
-    ahead.kind === "forecast"
-      ? [decidingFan(ahead, found.state, { value: found.value, name }, eventWords(found))]
-      : [];
-  return [reachTable(found), ...fans, ...figures];
+/** What is to be said of the time of a reading. */
+function remarkOf({ tooLate, withinRecord }: NextReading["choices"][number]): string {
+  if (tooLate) return "after the event: too late";
+  return withinRecord ? "within the record: kept samples only" : "ahead";
 }
 
-function reachTable(found: TimeToReach): Table {
-  const dated = found.groups.some((group) => !group.words.horizon.startsWith(found.periodUnit));
+/** The answer to "when": a table of groups, and the distribution over periods where chance has a part. */
+export function showReach(found: TimeToReach, ahead: Forecast | Simulation): readonly (Table | Figure)[] {
+  const figures = found.groups.some((group) => group.distribution.length > 1)
+    ? [reachFigure(found, ahead)]
+    : [];
+  const name = `the level ${amountWords(found)}`;
+  const fans =
+    ahead.kind === "forecast" && ahead.fit.rule.states.includes(found.state)
+      ? [decidingFan(ahead, found.state, { value: found.groups[0]!.levelAt, name }, eventWords(found))]
+      : [];
+  return [reachTable(found, ahead.groups[0]!.axis), ...fans, ...figures];
+}
+
+function reachTable(found: TimeToReach, axis: PeriodAxis): Table {
+  const dated = axis.counts !== "numbers";
   const time = dated
     ? ({ kind: "text" } as const)
     : ({ kind: "number", digits: 5, unit: found.periodUnit, grouped: false } as const);
-  const random = found.groups.some((group) => group.draws > 1);
+  const random = found.groups.some((group) => group.paths > 1);
   const grouped: Column[] = found.groups.length > 1 ? [{ key: "who", label: "Group", kind: "text" }] : [];
   return table({
-    title: `When ${found.state} reaches ${amountWords(found)}${ruleTitle(found.rule, "by")}`,
+    title: `When ${found.state} reaches ${amountWords(found)}${ruleTitle(found.rule, "by the rule")}`,
     columns: [
       ...grouped,
       { key: "time", label: "Without random change", ...time },
@@ -42,7 +53,7 @@ function reachTable(found: TimeToReach): Table {
     ],
     rows: found.groups.map((group) => ({
       ...group,
-      who: projectedName(group),
+      who: groupName(group),
       ...timesOf(group, dated),
     })),
     notes: [
@@ -59,19 +70,19 @@ function reachTable(found: TimeToReach): Table {
   }
 }
 
-/** "A: there by hour 372 in 99.0% of draws (Monte-Carlo error 0.2%)". */
+/** "A: there by hour 372 in 99.0% of paths (Monte-Carlo error 0.2%)". */
 function eventWords(found: TimeToReach): string {
   const each = found.groups.map((group) => {
-    const name = projectedName(group);
-    const share = `${(100 * (1 - group.never)).toFixed(1)}% of draws (Monte-Carlo error ${(100 * group.neverError).toFixed(1)}%)`;
-    return `${name === "" ? "" : `${name}: `}there by ${group.words.horizon} in ${share}`;
+    const name = groupName(group);
+    const share = `${(100 * (1 - group.never)).toFixed(1)}% of paths (Monte-Carlo error ${(100 * group.neverError).toFixed(1)}%)`;
+    return `${name === "" ? "" : `${name}: `}there by ${group.words.lastPeriod} in ${share}`;
   });
   const [first = "", ...rest] = each;
   return [first.charAt(0).toUpperCase() + first.slice(1), ...rest].join("; ");
 }
 
 const never: readonly Column[] = [
-  { key: "never", label: "Share of draws never there", kind: "probability", pairedWith: "neverError" },
+  { key: "never", label: "Share of paths never there", kind: "probability", pairedWith: "neverError" },
   { key: "neverError", label: "Monte-Carlo error", kind: "number", digits: 1 },
 ];
 
@@ -87,18 +98,28 @@ function timesOf(group: GroupReach, dated: boolean): Readonly<Record<string, num
 }
 
 /** "120 ×10⁴ cells/mL", as the sentence has it. */
-function amountWords({ value, unit }: TimeToReach): string {
-  return amount(`${value}`, unit);
+function amountWords(found: TimeToReach): string {
+  return reachedLevel(found, found.groups[0]!);
 }
 
-function reachFigure(found: TimeToReach): Figure {
+/** "falls to 0 EUR". */
+export function levelWords(found: TimeToReach): string {
+  return `${levelSide(found).sign < 0 ? "falls" : "rises"} to ${amountWords(found)}`;
+}
+
+function reachFigure(found: TimeToReach, ahead: Forecast | Simulation): Figure {
+  const [first] = ahead.groups;
+  const across =
+    ahead.kind === "forecast"
+      ? acrossRecord(ahead.fit.observations)
+      : acrossPeriods(ahead.axis, first!.time[0]! - first!.index[0]! * ahead.axis.step.every);
   return figure({
     title: `By when ${found.state} is at or past ${amountWords(found)}`,
-    x: { title: "First period", unit: found.periodUnit },
-    y: { title: "Share of draws there by then", ends: [0, 1] },
+    x: { ...across, title: "First period" },
+    y: { title: "Share of paths there by then", ends: [0, 1] },
     layers: found.groups.map((group) => ({
       mark: "line",
-      name: projectedName(group) || "draws",
+      name: groupName(group) || "paths",
       x: group.distribution.map((row) => row.time),
       y: group.distribution.map((row) => row.by),
       stepped: true,
@@ -109,7 +130,7 @@ function reachFigure(found: TimeToReach): Figure {
 /** The answer to "what setting": one row a solution. */
 export function showSolved(found: Solved): readonly Table[] {
   const setting = { kind: "number", digits: 8, unit: found.unit } as const;
-  const without = "risk" in found.target ? "simulated" : "exact";
+  const without = found.simulated ? "simulated" : "exact";
   return [
     table({
       title: `What ${found.vary} must be`,
@@ -118,10 +139,10 @@ export function showSolved(found: Solved): readonly Table[] {
         { key: "lower", label: `Interval ${percent(found.level)}, from`, ...setting, digits: 4 },
         { key: "upper", label: "to", ...setting, digits: 4 },
         { key: "meets", label: "Met by", kind: "text" },
-        { key: "achieved", label: found.measure, kind: "number", digits: 5 },
+        { key: "achieved", label: found.measure, kind: "number", digits: 5, unit: found.measureUnit },
         { key: "achievedError", label: "Monte-Carlo error", kind: "number", digits: 1 },
       ],
-      rows: found.solutions.map((solution) => ({
+      rows: [...found.solutions, ...sidesOf(found)].map((solution) => ({
         ...solution,
         lower: solution.margin === undefined ? without : (solution.margin.lower ?? "none"),
         upper: solution.margin === undefined ? without : (solution.margin.upper ?? "none"),
@@ -129,6 +150,20 @@ export function showSolved(found: Solved): readonly Table[] {
       notes: [found.sentence],
     }),
   ];
+}
+
+/** The two sides of every jump over the target, as rows beside the solutions. */
+function sidesOf(
+  found: Solved,
+): readonly Pick<Solved["solutions"][number], "value" | "achieved" | "achievedError" | "margin">[] {
+  return found.jumps.flatMap(({ below, above }) =>
+    [below, above].map((side) => ({
+      ...side,
+      achievedError: 0,
+      margin: undefined,
+      meets: "neither side: the measure jumps",
+    })),
+  );
 }
 
 /** The answer to "which reading": gain against time, and the best few. */
@@ -140,7 +175,7 @@ export function showNextReading(found: NextReading): readonly (Figure | Table)[]
   return [
     figure({
       title: `What a further reading of ${found.state} would bring`,
-      x: { title: "Time of the reading", unit: found.periodUnit },
+      x: { ...acrossPeriods(found.axis, found.zero), title: "Time of the reading" },
       y: { title: gain },
       layers: [
         {
@@ -152,20 +187,31 @@ export function showNextReading(found: NextReading): readonly (Figure | Table)[]
           upper: found.choices.map((choice) => choice.gain + 2 * choice.error),
         },
         { mark: "vertical", name: "best", x: found.recommended.time },
+        ...(found.event === undefined || !Number.isFinite(found.event)
+          ? []
+          : [{ mark: "vertical", name: "the event", x: found.event, style: 5 } as const]),
       ],
       notes: [found.sentence],
     }),
     table({
       title: "The five times that are worth most",
       columns: [
-        { key: "time", label: "Time", kind: "number", digits: 6, unit: found.periodUnit, grouped: false },
+        periodColumn("time", "Time", found.axis),
         narrowing
           ? { key: "gain", label: gain, kind: "percent", digits: 1 }
           : { key: "gain", label: gain, kind: "number", digits: 3 },
         { key: "error", label: "Monte-Carlo error", kind: "number", digits: 1 },
         { key: "cost", label: "Cost", kind: "number", digits: 3 },
+        { key: "remark", label: "Remark", kind: "text" },
       ],
-      rows: [...found.choices].sort((a, b) => b.worth - a.worth).slice(0, 5),
+      rows: [...found.choices]
+        .sort((a, b) => b.worth - a.worth)
+        .slice(0, 5)
+        .map((choice) => ({
+          ...choice,
+          time: periodCell(found.axis, found.zero, choice.time),
+          remark: remarkOf(choice),
+        })),
       notes: [found.sentence],
     }),
   ];

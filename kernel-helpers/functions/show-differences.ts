@@ -1,4 +1,4 @@
-import type { DifferenceSeries, Differences } from "../../src/record/index.js";
+import { type DifferenceSeries, type Differences, labelAt } from "../../src/record/index.js";
 import { type ChangePairs, changeFigure, type Figure } from "../figures/index.js";
 import { type Bundle, type Column, type Table, table } from "../tables/index.js";
 import { countsSentence, findingsList, periodSentence } from "./findings-list.js";
@@ -32,7 +32,9 @@ function pairsTable(differences: Differences): Table {
     columns: [
       ...(several ? [{ key: "group", label: "Series", kind: "text" as const }] : []),
       ...(observations.states.length > 1 ? [{ key: "state", label: "State", kind: "text" as const }] : []),
-      { key: "index", label: "From step", kind: "integer" },
+      observations.axis.counts === "numbers"
+        ? { key: "index", label: "From step", kind: "integer" }
+        : { key: "index", label: "From", kind: "text" },
       { key: "steps", label: "Steps", kind: "integer" },
       number("present", "Value", unit),
       number("next", "Next", unit),
@@ -56,7 +58,7 @@ function pairRow(pairs: DifferenceSeries, i: number): Record<string, unknown> {
   return {
     group: pairs.group,
     state: pairs.state,
-    index: pairs.index[i],
+    index: pairs.axis.counts === "numbers" ? pairs.index[i] : labelAt(pairs.axis, pairs.index[i]!),
     steps: pairs.steps[i],
     present: pairs.present[i],
     next: pairs.next[i],
@@ -69,7 +71,7 @@ function pairRow(pairs: DifferenceSeries, i: number): Record<string, unknown> {
 
 /** The two scatters asked for before any model: change against value, and change per value against value. */
 function changeFigures({ observations, series }: Differences): readonly Figure[] {
-  const { every, of } = observations.period.step;
+  const { every, of } = observations.axis.step;
   const per = every === 1 ? `per ${of}` : `per ${every} ${of}`;
   return observations.states.flatMap((state) => {
     const pairs = series.filter((one) => one.state === state.name);

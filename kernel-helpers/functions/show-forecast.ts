@@ -1,6 +1,9 @@
 import type { Forecast, GroupForecast } from "../../src/projection/index.js";
+import { ruleLabel } from "../../src/rule/index.js";
 import { type FanFigureOptions, type Figure, fanFigure, type ProjectedSeries } from "../figures/index.js";
+import { groupName } from "../results/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
+import { acrossGroup, acrossRecord, periodColumn } from "./across-periods.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
 
 /** A forecast as a reader sees it: fans, then the numbers ahead, then how scenarios differ. */
@@ -9,21 +12,21 @@ export function showForecast(ahead: Forecast): readonly (Figure | Table)[] {
   return [...fanCharts(ahead), aheadTable(ahead), ...(contrast === undefined ? [] : [contrast])];
 }
 
-/** How a group and scenario are named together. */
-export function projectedName({
-  group,
-  scenario,
-}: {
-  readonly group: string;
-  readonly scenario: string;
-}): string {
-  return [group, scenario].filter((part) => part !== "").join(", ");
-}
-
 function fanCharts(ahead: Forecast): Figure[] {
-  return ahead.fit.rule.states.map((state) =>
-    fanFigure({ ...fanOf(ahead, state), title: `Forecast of ${ahead.fit.rule.text}` }),
-  );
+  const { fit } = ahead;
+  const title = `Forecast of ${ruleLabel(fit.rule)}`;
+  return fit.rule.states.flatMap((state) => {
+    const factor = ahead.groups[0]!.states.find((each) => each.state === state)?.observed?.factor;
+    if (factor === undefined) return [fanFigure({ ...fanOf(ahead, state), title })];
+    const index = columnOf(ahead, state);
+    return [
+      fanFigure({ ...fanOf(ahead, state), title: `${title}: ${state}` }),
+      fanFigure({
+        ...indexFanOf(ahead, state),
+        title: `Forecast of ${index}, which reads ${factor} times ${state}`,
+      }),
+    ];
+  });
 }
 
 /** The fan of a state with the level that decides, and what the sentence says of it. */
@@ -41,29 +44,63 @@ export function decidingFan(
   });
 }
 
+function columnOf(ahead: Forecast, state: string): string {
+  return ahead.fit.observations.states.find((each) => each.name === state)!.column;
+}
+
+/** A state in its own unit; with its record, unless that reads it through a factor. */
 function fanOf(ahead: Forecast, state: string): Omit<FanFigureOptions, "title"> {
-  const { observations } = ahead.fit;
   return {
-    x: { title: observations.period.column, unit: observations.period.unit },
-    y: { title: state, unit: observations.states.find((each) => each.name === state)?.unit ?? "" },
-    series: ahead.groups.map((group) => projected(ahead, group, state)),
+    x: acrossRecord(ahead.fit.observations),
+    y: { title: state, unit: ahead.groups[0]!.states.find((each) => each.state === state)!.unit },
+    series: ahead.groups.map((group) => {
+      const { central, bands, observed } = group.states.find((each) => each.state === state)!;
+      const kind = observed === undefined ? "future observation" : "mean path";
+      const shown = bands.filter((band) => band.kind === kind);
+      return series(ahead, group, state, { central, bands: shown, recorded: observed === undefined });
+    }),
     notes: notesOf(ahead),
   };
 }
 
-function projected(ahead: Forecast, group: GroupForecast, name: string): ProjectedSeries {
-  const state = group.states.find((each) => each.state === name)!;
+/** What the record reads of a state through a factor: the record, and observations to come. */
+function indexFanOf(ahead: Forecast, state: string): Omit<FanFigureOptions, "title"> {
+  return {
+    x: acrossRecord(ahead.fit.observations),
+    y: {
+      title: columnOf(ahead, state),
+      unit: ahead.groups[0]!.states.find((each) => each.state === state)!.observed!.unit,
+    },
+    series: ahead.groups.map((group) => {
+      const { central, bands } = group.states.find((each) => each.state === state)!.observed!;
+      return series(ahead, group, state, { central, bands, recorded: true });
+    }),
+    notes: notesOf(ahead),
+  };
+}
+
+function series(
+  ahead: Forecast,
+  group: GroupForecast,
+  name: string,
+  shown: {
+    readonly central: readonly number[];
+    readonly bands: GroupForecast["states"][number]["bands"];
+    readonly recorded: boolean;
+  },
+): ProjectedSeries {
   const recorded = ahead.fit.observations.groups.find((each) => each.name === group.group)!;
   const x = group.time;
   const end = group.index.indexOf(group.recordEnd);
   const horizon = group.predictability?.predictionHorizon;
   return {
-    name: projectedName(group),
-    recorded: { name: "recorded", x: recorded.time, y: recorded.values[name]! },
-    central: { name: "fitted path", x, y: state.central },
-    bands: state.bands
-      .filter((band) => band.kind === "future observation")
-      .map(({ level, kind, lower, upper }) => ({ level, of: kind, x, lower, upper })),
+    name: groupName(group),
+    x: acrossGroup(recorded),
+    recorded: shown.recorded
+      ? { name: "recorded", x: recorded.time, y: recorded.values[name]! }
+      : { name: "recorded", x: [], y: [] },
+    central: { name: "fitted path", x, y: shown.central },
+    bands: shown.bands.map(({ level, kind, lower, upper }) => ({ level, of: kind, x, lower, upper })),
     recordEnd: x[end]!,
     ...(horizon !== undefined && x[end + horizon] !== undefined && { predictionHorizon: x[end + horizon]! }),
   };
@@ -77,29 +114,24 @@ function aheadTable(ahead: Forecast): Table {
   const level = Math.max(...ahead.options.levels);
   const each = periodsShown(ahead.options.periods, ahead.groups.length * ahead.fit.rule.states.length);
   const rows = ahead.groups.flatMap((group) => rowsAhead(group, level, each));
-  const dated = ahead.groups.some((group) => group.labels !== undefined);
-  const unit = ahead.groups[0]?.states[0]?.unit ?? "";
-  const number = { kind: "number", digits: 4, unit } as const;
+  const { axis } = ahead.fit.observations;
+  const number = { kind: "number", digits: 4, unit: commonUnit(ahead, (state) => state.unit) } as const;
+  const future = { ...number, unit: commonUnit(ahead, (state) => state.observed?.unit ?? state.unit) };
+  const scaled = ahead.groups[0]?.states.find((state) => state.observed !== undefined);
+  const observed =
+    scaled === undefined ? "Future observation" : `Future observation of ${columnOf(ahead, scaled.state)}`;
   const percent = `${Number((100 * level).toPrecision(12))}%`;
   return table({
     title: "Periods ahead",
     columns: [
-      ...several("group", "Group", ahead.groups.map(projectedName)),
+      ...several("group", "Group", ahead.groups.map(groupName)),
       ...several("state", "State", ahead.fit.rule.states),
-      dated
-        ? { key: "time", label: ahead.fit.observations.period.column, kind: "text" }
-        : {
-            key: "time",
-            label: ahead.fit.observations.period.column,
-            kind: "number",
-            digits: 6,
-            grouped: false,
-          },
+      periodColumn("time", axis.column, axis),
       { key: "central", label: "Fitted path", ...number },
       { key: "meanLower", label: `Mean path ${percent}, from`, ...number },
       { key: "meanUpper", label: "to", ...number },
-      { key: "futureLower", label: `Future observation ${percent}, from`, ...number },
-      { key: "futureUpper", label: "to", ...number },
+      { key: "futureLower", label: `${observed} ${percent}, from`, ...future },
+      { key: "futureUpper", label: "to", ...future },
     ],
     rows,
     limit: rows.length,
@@ -110,6 +142,12 @@ function aheadTable(ahead: Forecast): Table {
       ...notesOf(ahead),
     ],
   });
+}
+
+/** The unit that all states share; "" where they differ. */
+function commonUnit(ahead: Forecast, unitOf: (state: GroupForecast["states"][number]) => string): string {
+  const units = new Set(ahead.groups.flatMap((group) => group.states.map(unitOf)));
+  return units.size === 1 ? [...units][0]! : "";
 }
 
 /** Rows shown of all groups together where a forecast is long, and the most where all of a short one is shown. */
@@ -130,14 +168,15 @@ function rowsAhead(group: GroupForecast, level: number, each: number): Readonly<
     Array.from({ length: count }, (_, k) => present + Math.round(((k + 1) * ahead) / count)),
   );
   return group.states.flatMap((state) => {
-    const band = (kind: string) => state.bands.find((each) => each.kind === kind && each.level === level)!;
+    const bands = [...state.bands, ...(state.observed?.bands ?? [])];
+    const band = (kind: string) => bands.find((each) => each.kind === kind && each.level === level)!;
     const mean = band("mean path");
     const future = band("future observation");
     return group.index.flatMap((_, t) =>
       !shown.has(t)
         ? []
         : {
-            group: projectedName(group),
+            group: groupName(group),
             state: state.state,
             time: group.labels?.[t] ?? group.time[t],
             central: state.central[t],
@@ -158,7 +197,7 @@ function contrastTable(ahead: Forecast): Table | undefined {
     return group.states.map((state, s) => {
       const end = group.index.length - 1;
       const difference = state.central[end]! - first.states[s]!.central[end]!;
-      return { what: projectedName(group), than: first.scenario, state: state.state, difference };
+      return { what: groupName(group), than: first.scenario, state: state.state, difference };
     });
   });
   if (rows.length === 0) return undefined;
@@ -180,6 +219,6 @@ function notesOf(ahead: Forecast): string[] {
   return [
     "Mean path: uncertainty of the parameters. Future observation: that and the error of a single value.",
     `${paths} drawn paths, seed ${seed}; quantiles by definition 7.`,
-    ...cautionsByGroup(ahead.groups.map((group) => ({ ...group, group: projectedName(group) }))),
+    ...cautionsByGroup(ahead.groups.map((group) => ({ ...group, group: groupName(group) }))),
   ];
 }

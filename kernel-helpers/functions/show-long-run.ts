@@ -70,6 +70,8 @@ export function showCycles(found: Cycles): readonly Table[] {
 const losses = {
   flip: "flip: the period doubles",
   fold: "fold: it meets an unstable one and vanishes",
+  transcritical: "transcritical: it exchanges stability with another one, and both go on",
+  pitchfork: "pitchfork: it goes on unstable, and two stable ones leave it",
   "neimark-sacker": "Neimark-Sacker: turning motion takes over",
 } as const;
 

@@ -1,6 +1,8 @@
 import type { Observations, ObservedGroup, ObservedState } from "../../src/record/index.js";
 import { type Figure, type FlaggedValue, recordFigure } from "../figures/index.js";
-import { type Bundle, type Table, table } from "../tables/index.js";
+import { type Observations as ShownObservations, withLast } from "../results/index.js";
+import { type Bundle, showing, type Table, table } from "../tables/index.js";
+import { acrossRecord, periodCell, periodColumn } from "./across-periods.js";
 import { decisionsTable } from "./decisions-table.js";
 import { countsSentence, findingsList, periodSentence } from "./findings-list.js";
 import { shownTogether } from "./shown-together.js";
@@ -8,8 +10,13 @@ import { shownTogether } from "./shown-together.js";
 /** Series drawn; with more the figure says how many are left out. */
 const drawn = 12;
 
+/** Makes a record ready for a reader: its last values, its display, and nothing left to change in it. */
+export function presentObservations(observations: Observations): ShownObservations {
+  return showing(withLast(observations), () => observationsBundle(observations));
+}
+
 /** Shows a record: one line a series, the raw values with flagged rows marked, and what was found. */
-export function observationsBundle(observations: Observations): Promise<Bundle> {
+function observationsBundle(observations: Observations): Promise<Bundle> {
   const findings = findingsList(observations.findings);
   const { decisions = [] } = observations;
   const decided = decisions.length > 0 ? decisionsTable(decisions) : undefined;
@@ -24,7 +31,8 @@ function seriesTable(observations: Observations): Table {
     columns: [
       ...(named ? [{ key: "name", label: "Series", kind: "text" as const }] : []),
       { key: "count", label: "Values", kind: "integer" },
-      { key: "last", label: "Last step", kind: "integer" },
+      periodColumn("from", "From", observations.axis),
+      periodColumn("to", "To", observations.axis),
       { key: "gaps", label: "Multi-step pairs", kind: "integer" },
       ...states.flatMap(({ state, i }) =>
         ["first", "least", "most", "final"].map((word) => ({
@@ -42,11 +50,12 @@ function seriesTable(observations: Observations): Table {
 }
 
 function seriesRow(group: ObservedGroup, states: readonly ObservedState[]): Record<string, unknown> {
-  const { index } = group;
+  const { axis, index, time } = group;
   const row: Record<string, unknown> = {
     name: group.name,
     count: index.length,
-    last: index[index.length - 1],
+    from: periodCell(axis, time[0]!, time[0]!),
+    to: periodCell(axis, time[0]!, time[time.length - 1]!),
     gaps: index.filter((at, i) => i > 0 && at - index[i - 1]! > 1).length,
   };
   states.forEach(({ name }, i) => {
@@ -60,14 +69,15 @@ function seriesRow(group: ObservedGroup, states: readonly ObservedState[]): Reco
 }
 
 /** One figure a state: series side by side, rows that a finding names ringed. */
-function recordFigures({ groups, states, period, findings }: Observations): readonly Figure[] {
+function recordFigures(observations: Observations): readonly Figure[] {
+  const { groups, states, findings } = observations;
   const why = new Map(findings.map(({ row, kind }) => [row, kind]));
   const shown = groups.slice(0, drawn);
   const notes = groups.length > drawn ? [`The first ${drawn} of ${groups.length} series are drawn.`] : [];
   return states.map((state) =>
     recordFigure({
       title: "Record as read",
-      x: { title: period.column, unit: period.unit },
+      x: acrossRecord(observations),
       y: { title: state.name, unit: state.unit },
       series: shown.map((group) => ({
         name: group.name === "" ? state.name : group.name,

@@ -6,15 +6,16 @@ import {
   ruleTex,
   ruleText,
 } from "../../src/rule/index.js";
-import { type Bundle, type Table, table } from "../tables/index.js";
+import { type Bundle, showing, type Table, table } from "../tables/index.js";
 import { shownTogether } from "./shown-together.js";
 
 const number = { kind: "number", digits: 6 } as const;
 
 function namesTable(rule: Rule): Table {
+  const lines = ruleText(rule).split("\n").join("; ");
   const meanings = rule.named?.quantities ?? {};
   return table({
-    title: ruleText(rule).split("\n").join("; "),
+    title: rule.name === undefined ? lines : `${rule.name}: ${lines}`,
     columns: [
       { key: "name", label: "Name", kind: "text" },
       { key: "role", label: "Role", kind: "text" },
@@ -69,8 +70,13 @@ function knownTable(named: NamedRule): Table {
   });
 }
 
+/** Makes a rule ready for a reader: its display, and nothing left to change in it. It stays the rule that was compiled. */
+export function presentRule(rule: Rule): Rule {
+  return showing(rule, () => showRule(rule));
+}
+
 /** A rule as a reader sees it: its lines, its names, what is known of it, and its TeX for a paper. */
-export async function showRule(rule: Rule): Promise<Bundle> {
+async function showRule(rule: Rule): Promise<Bundle> {
   const parts = rule.named === undefined ? [] : [knownTable(rule.named)];
   const bundle = await shownTogether([namesTable(rule), ...parts]);
   return { ...bundle, "text/latex": `$$\\begin{gathered}\n${ruleTex(rule)}\n\\end{gathered}$$` };

@@ -1,6 +1,8 @@
 import type { GroupForecast, Simulation } from "../../src/projection/index.js";
+import { ruleLabel } from "../../src/rule/index.js";
 import { type Figure, figure, type Layer } from "../figures/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
+import { acrossPeriods, periodColumn } from "./across-periods.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
 import { ruleTitle } from "./rule-title.js";
 
@@ -14,10 +16,10 @@ const percent = (level: number): string => `${Number((100 * level).toPrecision(1
 function figuresOf(run: Simulation): Figure[] {
   return run.rule.states.map((name, s) =>
     figure({
-      title: `Simulation${ruleTitle(run.rule.text, "of")}: ${name}`,
+      title: `Simulation${ruleTitle(ruleLabel(run.rule), "of")}: ${name}`,
       panels: run.groups.map((group) => ({
         title: group.scenario,
-        x: { title: run.options.period },
+        x: acrossPeriods(run.axis, group.time[0]! - group.index[0]! * run.axis.step.every),
         y: { title: name, unit: group.states[s]!.unit },
         layers: layersOf(run, group, s),
       })),
@@ -46,7 +48,7 @@ function tableOf(run: Simulation): Table {
   const columns: Column[] = [
     ...(run.groups.length > 1 ? [{ key: "scenario", label: "Scenario", kind: "text" } as const] : []),
     ...(run.rule.states.length > 1 ? [{ key: "state", label: "State", kind: "text" } as const] : []),
-    { key: "period", label: run.options.period, kind: "integer", grouped: false },
+    { ...periodColumn("period", run.options.period, run.axis), unit: "" },
     { key: "central", label: "Without random change", ...number },
   ];
   if (random)
@@ -79,7 +81,7 @@ function rowsOf(run: Simulation, level: number): Readonly<Record<string, unknown
       return shown.map((t) => ({
         scenario: group.scenario,
         state: state.state,
-        period: group.time[t],
+        period: group.labels?.[t] ?? group.time[t],
         central: state.central[t],
         median: state.median[t],
         lower: band?.lower[t],

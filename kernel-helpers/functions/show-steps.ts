@@ -8,25 +8,29 @@ import {
 import type { Rule } from "../../src/rule/index.js";
 import { type Figure, figure } from "../figures/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
+import { acrossPeriods, periodCell, periodColumn } from "./across-periods.js";
 
 const unitOf = (rule: Rule, name: string): string => rule.units[name] ?? "";
 const number = { kind: "number", digits: 6 } as const;
 
 /** A path: its figure, and its numbers with the quantities inside each period. */
 export function showPath(run: Trajectory): readonly (Figure | Table)[] {
-  const { rule, startsAt: from } = run;
-  const periods = Array.from({ length: run.periods + 1 }, (_, t) => from + t);
+  const { rule, startsAt: from, axis } = run;
+  const { every } = axis.step;
+  const times = Array.from({ length: run.periods + 1 }, (_, t) =>
+    axis.counts === "numbers" ? axis.origin + (from + t) * every : (from + t) * every,
+  );
   const columns = { ...run.values, ...run.quantities };
   const names = [...rule.states, ...rule.quantities];
   const notes = run.stop.kind === "complete" ? [] : [run.stop.reason];
   const numbers = table({
     title: "Periods",
     columns: [
-      { key: "period", label: "Period", kind: "integer", grouped: false },
+      { ...periodColumn("period", "Period", axis), unit: "" },
       ...names.map((name): Column => ({ key: name, label: name, unit: unitOf(rule, name), ...number })),
     ],
-    rows: periods.map((period, t) => ({
-      period,
+    rows: times.map((time, t) => ({
+      period: periodCell(axis, 0, time),
       ...Object.fromEntries(names.map((name) => [name, finite(columns[name]![t]!)])),
     })),
     limit: 30,
@@ -34,9 +38,9 @@ export function showPath(run: Trajectory): readonly (Figure | Table)[] {
   });
   const panels = rule.states.map((name) => ({
     title: rule.states.length > 1 ? name : "",
-    x: { title: "Period" },
+    x: axis.counts === "numbers" ? { title: "Period" } : acrossPeriods(axis, 0),
     y: { title: name, unit: unitOf(rule, name) },
-    layers: [{ mark: "line", name, x: periods, y: run.values[name]! } as const],
+    layers: [{ mark: "line", name, x: times, y: run.values[name]! } as const],
   }));
   return [figure({ title: "Path without random change", panels, notes }), numbers];
 }

@@ -1,3 +1,5 @@
+import { freezeDeep } from "../../src/numeric/index.js";
+
 /** Representations of a value by MIME type; `text/plain` is always present. */
 export type Bundle = Readonly<Record<string, string | object>>;
 
@@ -5,16 +7,19 @@ export type Bundle = Readonly<Record<string, string | object>>;
 const shows: unique symbol = Symbol.for("mime-bundle") as never;
 
 /**
- * Freezes a result and adds a hidden display method, which listings, copies and comparisons ignore.
+ * Adds a hidden display method to a result, which listings, copies and comparisons ignore, and freezes it deeply.
  *
- * @param result - a plain object that is not frozen yet.
+ * The result is not copied: what is kept beside an object (a rule's graph and code) is found again under the same one.
+ *
+ * @param result - a plain object; one that has a display method, or is frozen already, stays as it is.
  * @param bundle - creates the representations; called only when a front end displays the result.
  * @returns the same object, frozen.
  * @example showing({ kind: "note", text: "two gaps" }, () => ({ "text/plain": "two gaps" }));
  */
 export function showing<T extends object>(result: T, bundle: () => Bundle | Promise<Bundle>): Readonly<T> {
-  Object.defineProperty(result, shows, { value: bundle, enumerable: false });
-  return Object.freeze(result);
+  if (!Object.hasOwn(result, shows) && Object.isExtensible(result))
+    Object.defineProperty(result, shows, { value: bundle });
+  return freezeDeep(result);
 }
 
 /**

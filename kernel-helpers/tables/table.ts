@@ -1,3 +1,4 @@
+import { frozenCopy } from "../../src/numeric/index.js";
 import { type NumberFormat, numberFormat } from "../wording/index.js";
 import { duplicateColumnError, noColumnsError, unknownColumnKindError } from "./errors.js";
 import { showing } from "./show-itself.js";
@@ -75,15 +76,17 @@ export interface TableOptions {
  */
 export function table(options: TableOptions): Table {
   checkColumns(options.columns, options.title);
+  // Copies: the caller's rows must not be frozen, nor change the table later.
+  const { title, columns, rows, totals = [], notes = [], limit = 40, format } = frozenCopy(options);
   const made: Table = {
     kind: "table",
-    title: options.title,
-    columns: Object.freeze([...options.columns]),
-    rows: Object.freeze([...options.rows] as Row[]),
-    totals: Object.freeze([...(options.totals ?? [])] as Row[]),
-    notes: Object.freeze([...(options.notes ?? [])]),
-    limit: Math.max(1, options.limit ?? 40),
-    format: Object.freeze({ ...numberFormat(), ...options.format }),
+    title,
+    columns,
+    rows: rows as readonly Row[],
+    totals: totals as readonly Row[],
+    notes,
+    limit: Math.max(1, limit),
+    format: { ...numberFormat(), ...format },
   };
   return showing(made, () => ({ "text/html": tableHtml(made), "text/plain": tableText(made) }));
 }

@@ -19,6 +19,9 @@ export {
   type ExactValue,
   exactTrajectory,
 } from "./exact/exact-trajectory.js";
+export { type InputPlan, type InputPlans, isByGroup, planOfGroup } from "./inputs/input-plan.js";
+export { plannedInputs } from "./inputs/planned-inputs.js";
+export { initialFrom, inputsFrom, type RunStart, runStart, type StartOptions } from "./inputs/run-start.js";
 export { type Attractor, type AttractorOptions, attractor } from "./long-run/attractor.js";
 export { type Basin, type Basins, type BasinsOptions, basins } from "./long-run/basins.js";
 export { type Cobweb, type CobwebOptions, cobweb } from "./long-run/cobweb.js";
@@ -38,15 +41,16 @@ export { type Equilibria, type EquilibriaOptions, type Equilibrium, equilibria }
 export type { Multiplier } from "./rest/multiplier.js";
 export type { Stability } from "./rest/stability.js";
 export type { HeldSetting } from "./setting/held-step.js";
-export type { InputValues } from "./setting/input-columns.js";
 export type { SearchRange } from "./setting/search-range.js";
 export { type InitialValues, initialVector, parametersBySlot } from "./setting/setting.js";
+export { type BoundedPath, type BoundReached, boundedPath, type PathRun } from "./trajectory/bounded-path.js";
 export {
   type GuaranteedDigits,
   type GuaranteedOptions,
   guaranteedDigits,
 } from "./trajectory/guaranteed-digits.js";
 export {
+  type Absorption,
   type Trajectory,
   type TrajectoryOptions,
   type TrajectoryStop,

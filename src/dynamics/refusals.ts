@@ -28,6 +28,14 @@ export function notFinite(role: string, name: string, value: unknown): ModelErro
   );
 }
 
+export function beyondBounds(state: string, value: number, low: number, high: number): ModelError {
+  return new ModelError(
+    "beyond-bounds",
+    `The initial value of "${state}" is ${value}, and the rule bounds ${state} to ${low} to ${high}. Give an \`initial\` within them, or the rule other \`bounds\`.`,
+    { state, value, low, high },
+  );
+}
+
 export function wrongHistory(state: string, wanted: number, given: number): ModelError {
   return new ModelError(
     "wrong-history",
@@ -42,6 +50,41 @@ export function missingInput(input: string, period: number, given: number): Mode
     `The input "${input}" is needed at period ${period}, and the values given reach from period 0 to ${given - 1}. Give values for every period of the path, or shorten it.`,
     { input, period, given },
   );
+}
+
+/** @param recorded - how many of the first steps read what is recorded. */
+export function futureInputMissing(inputs: readonly string[], periods: number, recorded: number): ModelError {
+  const why =
+    recorded <= 0
+      ? ""
+      : ` (the first ${recorded === 1 ? "step reads the last recorded value" : `${recorded} steps read recorded values`})`;
+  return new ModelError(
+    "future-input-missing",
+    `The rule needs ${inputs.join(", ")} for the next ${periods} ${periods === 1 ? "period" : "periods"}${why}; supply a scenario, such as inputs: { ${inputs[0]}: { usual: 0 } }.`,
+    { inputs, periods },
+  );
+}
+
+export function unknownInput(name: string, inputs: readonly string[]): ModelError {
+  const [near] = nearestNames(name, inputs);
+  const hint = near === undefined ? "" : ` Did you mean "${near}"?`;
+  return new ModelError(
+    "unknown-input",
+    `The rule has no input "${name}". It has: ${inputs.length === 0 ? "none" : inputs.join(", ")}.${hint}`,
+    { name, inputs },
+  );
+}
+
+export function shortPlan(name: string, given: number, needed: number): ModelError {
+  return new ModelError(
+    "future-input-missing",
+    `Invalid plan for \`${name}\`: it has ${given} values and the projection needs ${needed}. Give one for each period, or { usual, from, at }.`,
+    { name, given, needed },
+  );
+}
+
+export function badPlan(name: string, why: string): ModelError {
+  return new ModelError("plan-not-readable", `Invalid plan for \`${name}\`: ${why}.`, { name });
 }
 
 export function unreadableOption(option: string, wanted: string, given: unknown): ModelError {
@@ -117,4 +160,38 @@ export function pathLeaves(what: string): ModelError {
     "path-leaves",
     `${what} is a matter of the long run, and this path leaves the finite range. Use path to see in which period and why.`,
   );
+}
+
+export function earlierInputMissing(input: string, label: string): ModelError {
+  return new ModelError(
+    "missing-input",
+    `The rule reads the input "${input}" at ${label}, before the first planned period, and no value is recorded there. ` +
+      "Record it (0 where nothing happened), or begin later.",
+    { input, label },
+  );
+}
+
+export function startUnreadable(startsAt: unknown, why: string): ModelError {
+  return new ModelError("start-not-readable", `Option \`startsAt\`: ${String(startsAt)} ${why}.`, {
+    startsAt,
+  });
+}
+
+export function periodMissing(startsAt: string): ModelError {
+  return new ModelError(
+    "start-not-readable",
+    `Option \`startsAt\`: "${startsAt}" is a label, and \`period\` does not say what a period is. Write period: "month", or a step such as { every: 12, of: "hour" }.`,
+    { startsAt },
+  );
+}
+
+export function groupUnknown(name: string | undefined, groups: readonly string[]): ModelError {
+  const [near] = nearestNames(name ?? "", groups);
+  const hint = near === undefined ? "" : ` Did you mean "${near}"?`;
+  const what =
+    name === undefined ? "names none of the groups of the record" : `"${name}" is no group of the record`;
+  return new ModelError("unknown-name", `Option \`group\`: ${what}. It has: ${list(groups)}.${hint}`, {
+    name,
+    groups,
+  });
 }

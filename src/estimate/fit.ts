@@ -1,13 +1,18 @@
 import type { Warning } from "../numeric/index.js";
 import type { Observations } from "../record/index.js";
 import type { Rule } from "../rule/index.js";
+import { type CommonParameters, commonParametersWarnings } from "./fits/common-parameters.js";
 import { fitGroups } from "./fits/fit-group.js";
 import { checkOptions } from "./options/check-options.js";
 import { conventionsOf } from "./options/conventions.js";
 import type { FitOptions } from "./options/fit-options.js";
 import { inputWarnings } from "./options/input-warnings.js";
 import { matchStates } from "./options/match-states.js";
+import { matchNotes, unitWarnings } from "./options/record-against-rule.js";
+import { recordWarnings } from "./options/record-warnings.js";
+import { type FitProblem, fitProblem } from "./problem/fit-problem.js";
 import { refuseMissingArgument } from "./refusals.js";
+import type { Criteria } from "./result/criteria.js";
 import type { Estimate } from "./result/estimate-of.js";
 import type { GroupFit } from "./result/group-fit.js";
 
@@ -19,8 +24,12 @@ export interface Fit {
   readonly observations: Observations;
   readonly options: FitOptions;
   readonly groups: readonly GroupFit[];
+  /** Log-likelihood, AIC, AICc and BIC of the whole fit, however many groups. */
+  readonly criteria: Criteria;
   /** Of groups fitted together: the parameters that hold for all, or their means and spreads among the groups. */
   readonly population?: readonly Estimate[];
+  /** Of a combined fit: whether the groups have their parameters in common. */
+  readonly commonParameters?: CommonParameters;
   readonly warnings: readonly Warning[];
   /** The conventions behind the numbers, as printed with every table of the fit. */
   readonly conventions: readonly string[];
@@ -40,7 +49,7 @@ export interface Fit {
  * @throws {ModelError} `argument-missing` | `errors-not-stated` | `unknown-spread` | `bad-spread` | `factor-without-trajectory` |
  *   `robust-not-by-squares` | `rule-jumps` |
  *   `states-not-recorded` | `too-few-observations` | `no-change` | `no-logarithm` | `not-a-count` | `all-censored` |
- *   `no-finite-start` | `unknown-name` | `start-outside-bounds` | `input-not-recorded` | `input-missing-in-period`.
+ *   `no-finite-start` | `unit-scales-differ` | `unknown-name` | `start-outside-bounds` | `input-not-recorded` | `input-missing-in-period`.
  * @see Bates, D. M. and Watts, D. G. (1988), Nonlinear Regression Analysis and Its Applications, chapters 2 and 6.
  * @example
  * const crowding = recurrence("ΔN = r*N*(1 - N/K)");
@@ -52,15 +61,40 @@ export function fit(rule: Rule, observations: Observations, options: FitOptions)
   if (observations?.kind !== "observations") throw refuseMissingArgument("record");
   checkOptions(rule, options);
   const matched = matchStates(rule, observations);
-  const { groups, population } = fitGroups(rule, matched.groups, options);
-  return Object.freeze({
+  const unitsDisagree = unitWarnings(rule, matched, options);
+  const { groups, criteria, population, commonParameters } = fitGroups(rule, matched.groups, options);
+  const fitted: Fit = {
     kind: "fit",
     rule,
     observations: matched,
-    options: Object.freeze({ ...options }),
-    groups: Object.freeze(groups),
-    ...(population && { population: Object.freeze(population) }),
-    warnings: Object.freeze([...rule.findings, ...inputWarnings(rule, matched, options)]),
-    conventions: Object.freeze(conventionsOf(options, groups)),
-  });
+    options: { ...options },
+    groups,
+    criteria,
+    ...(population && { population }),
+    ...(commonParameters && { commonParameters }),
+    warnings: [
+      ...rule.findings,
+      ...unitsDisagree,
+      ...recordWarnings(matched),
+      ...inputWarnings(rule, matched, options),
+      ...commonParametersWarnings(commonParameters),
+    ],
+    conventions: [...conventionsOf(options, groups), ...matchNotes(rule, observations)],
+  };
+  problems.set(fitted, fitProblem(fitted, fit));
+  return fitted;
+}
+
+const problems = new WeakMap<Fit, FitProblem>();
+
+/**
+ * What a fit searched, ready to be searched again. Of a fit that was copied, or that came from a worker or a file, it is
+ * made again from the rule, the record and the options.
+ */
+export function problemOf(fitted: Fit): FitProblem {
+  const known = problems.get(fitted);
+  if (known !== undefined) return known;
+  const made = fitProblem(fitted, fit);
+  problems.set(fitted, made);
+  return made;
 }

@@ -1,5 +1,5 @@
 import { ModelError } from "../numeric/index.js";
-import type { ObservedGroup } from "../record/index.js";
+import { type ObservedGroup, periodWords } from "../record/index.js";
 
 const named = (group: ObservedGroup): string => (group.name === "" ? "" : ` of "${group.name}"`);
 
@@ -46,6 +46,22 @@ export function refuseUnmatchedStates(states: readonly string[], recorded: reado
     `The rule moves ${states.join(", ")}, but the record holds ${recorded.join(", ")}. Name the columns with ` +
       `{ values: { ${states.map((s) => `${s}: "column"`).join(", ")} } } in observations(...).`,
     { states, recorded },
+  );
+}
+
+export function unitScaleError(
+  state: string,
+  column: string,
+  recorded: string,
+  stated: string,
+  factor: number,
+): ModelError {
+  const times = Number((factor < 1 ? 1 / factor : factor).toPrecision(6));
+  return new ModelError(
+    "unit-scales-differ",
+    `The record gives "${column}" in ${recorded}, and the rule states ${stated} for ${state}: a factor of ${times} apart. ` +
+      `Write \`units: { ${state}: "${recorded}" }\` with the rule, or convert the column and state \`unit: "${stated}"\` in observations(...).`,
+    { state, column, recorded, stated, factor },
   );
 }
 
@@ -98,6 +114,15 @@ export function refuseNoStart(group: ObservedGroup, ruleText: string): ModelErro
   );
 }
 
+export function refuseStepsFromZero(group: ObservedGroup, row: number, ruleText: string): ModelError {
+  return new ModelError(
+    "step-from-zero",
+    `Row ${row}${named(group)} is a count of 0 and the next one is not: with \`errors: "process"\` every step starts from the ` +
+      `recorded count, and "${ruleText}" stays at 0. Write \`errors: "observation"\`, which fits the whole trajectory.`,
+    { group: group.name, row, rule: ruleText },
+  );
+}
+
 export function refuseNoCount(group: ObservedGroup, row: number, value: number): ModelError {
   return new ModelError(
     "not-a-count",
@@ -116,10 +141,11 @@ export function refuseAllCensored(group: ObservedGroup, state: string, side: "ab
   );
 }
 
-export function refuseInputGap(input: string, group: ObservedGroup, period: number): ModelError {
+export function refuseInputGap(input: string, group: ObservedGroup, index: number): ModelError {
+  const period = periodWords(group.axis, index);
   return new ModelError(
     "input-missing-in-period",
-    `The input "${input}" is not recorded in period ${period}${named(group)}, which a step of the rule reads. Record it (0 where ` +
+    `The input "${input}" is not recorded at ${period}${named(group)}, which a step of the rule reads. Record it (0 where ` +
       "nothing happened), or fit the part of the record that has it.",
     { input, group: group.name, period },
   );
@@ -164,11 +190,27 @@ export function refuseFactor(errors: string): ModelError {
   );
 }
 
-export function refuseResampling(): ModelError {
+export function refuseSharedParameters(): ModelError {
+  return new ModelError(
+    "groups-together",
+    "Groups that share parameters cannot be resampled one by one. Read the profile intervals of the fit, or fit them with " +
+      '`groups: "separate"`.',
+  );
+}
+
+export function refuseNoDraws(): ModelError {
+  return new ModelError(
+    "not-simulated",
+    "No records can be simulated from this fit: it has censored values, whose limits are not known for the exact ones, or " +
+      "counts with weights, which stand for no single count. Read the profile intervals of the fit.",
+  );
+}
+
+export function refuseNotBySquares(what: string): ModelError {
   return new ModelError(
     "not-by-least-squares",
-    "Records are simulated anew from fits by least squares of each group on its own. This fit was made by another likelihood, of " +
-      "groups together, or robustly: read its profiles.",
+    `${what} works on fits by least squares of each group on its own. Counts, censored values, errors in both and groups ` +
+      "together have profile intervals instead.",
   );
 }
 
@@ -204,19 +246,11 @@ export function refuseNoNewRows(): ModelError {
   );
 }
 
-export function refuseOverlap(group: string, time: number): ModelError {
-  return new ModelError(
-    "rows-overlap",
-    `The new rows${group && ` of "${group}"`} begin at ${time}, inside the record that the fit already has. Give only later rows; to change ` +
-      "earlier ones, fit the corrected record anew.",
-    { group, time },
-  );
-}
-
 export function refuseNoResiduals(): ModelError {
   return new ModelError(
     "no-residuals",
-    'A fit with errors in both has predictions, not residuals, so they cannot be drawn anew. Use bootstrap(fit, { errors: "parametric" }).',
+    "Residuals of counts, and predictions of a fit with errors in both, cannot be put on other fitted values. Use " +
+      '`errors: "parametric"`, which draws from the fitted distribution.',
   );
 }
 

@@ -1,8 +1,7 @@
-import type { Observations, ObservedGroup } from "../record/index.js";
-import type { Fit } from "./fit.js";
-import { fit as fitRule } from "./fit.js";
+import { joined, type Observations } from "../record/index.js";
+import { type Fit, problemOf } from "./fit.js";
 import { matchStates } from "./options/match-states.js";
-import { refuseNoNewRows, refuseOverlap, refuseUnknownName } from "./refusals.js";
+import { refuseNoNewRows, refuseUnknownName } from "./refusals.js";
 
 /** How one estimate changed when rows were added. */
 export interface EstimateChange {
@@ -34,7 +33,7 @@ const notable = 2;
  * Adds later rows of the record and fits again with the same options, from the estimates before.
  *
  * @param later - rows after those of the fit, read with the same options; groups are matched by name.
- * @throws {ModelError} `no-new-rows` | `rows-overlap` | `unknown-name` (a group that the fit does not have), and those of `fit`.
+ * @throws {ModelError} `no-new-rows` | `rows-overlap` | `axes-differ` | `unknown-name` (a group that the fit does not have), and those of `fit`.
  * @example
  * const hourly = { period: "hour", step: { every: 1, of: "hour" }, value: "N" };
  * const early = fit(crowding, observations({ hour: [0, 1, 2, 3, 4, 5, 6], N: [10, 18, 31, 50, 69, 85, 93] }, hourly), { errors: "observation" });
@@ -46,13 +45,9 @@ export function updateFit(before: Fit, later: Observations): UpdatedFit {
   for (const { name } of more.groups)
     if (!known.includes(name)) throw refuseUnknownName(name, known, "group");
   const added: Record<string, number> = {};
-  const groups = before.observations.groups.map((group) => {
-    const rows = more.groups.find((each) => each.name === group.name);
-    added[group.name] = rows?.index.length ?? 0;
-    return rows === undefined ? group : joined(group, rows, before.observations.period.step.every);
-  });
+  for (const name of known) added[name] = more.groups.find((each) => each.name === name)?.index.length ?? 0;
   if (Object.values(added).every((count) => count === 0)) throw refuseNoNewRows();
-  const now = fitRule(before.rule, { ...before.observations, groups }, before.options);
+  const now = problemOf(before).refit({ observations: joined(before.observations, more) });
   const changes = before.groups.flatMap((was, g) => changesOf(was, now.groups[g]!));
   const remarks = changes
     .filter(({ moved }) => moved !== undefined && Math.abs(moved) > notable)
@@ -60,46 +55,7 @@ export function updateFit(before: Fit, later: Observations): UpdatedFit {
       ({ group, name, was, now: is, moved }) =>
         `${name}${group && ` of ${group}`} moved from ${was.toPrecision(4)} to ${is.toPrecision(4)}, ${Math.abs(moved!).toFixed(1)} standard errors: check whether the rule still holds.`,
     );
-  return Object.freeze({ kind: "updated-fit", fit: now, added, changes: Object.freeze(changes), remarks });
-}
-
-/** A group with later rows behind its own; their steps are counted on from its first row. */
-function joined(group: ObservedGroup, later: ObservedGroup, every: number): ObservedGroup {
-  const shift = Math.round((later.time[0]! - group.time[0]!) / every);
-  if (shift <= group.index[group.index.length - 1]!) throw refuseOverlap(group.name, later.time[0]!);
-  const append = (a: Float64Array, b: Float64Array | undefined): Float64Array =>
-    Float64Array.from([...a, ...(b ?? new Float64Array(later.index.length).fill(Number.NaN))]);
-  const { weights, censoring, replicates: _, labels: __, ...rest } = group;
-  const marks = (from: ObservedGroup, state: string): ArrayLike<number> =>
-    from.censoring?.[state] ?? new Int8Array(from.index.length);
-  return {
-    ...rest,
-    index: Int32Array.from([...group.index, ...later.index.map((index) => index + shift)]),
-    time: append(group.time, later.time),
-    rows: Int32Array.from([
-      ...group.rows,
-      ...later.rows.map((row) => row + group.rows[group.rows.length - 1]!),
-    ]),
-    values: mapped(group.values, (column, state) => append(column, later.values[state])),
-    inputs: mapped(group.inputs, (column, input) => append(column, later.inputs[input])),
-    ...((weights ?? later.weights) && { weights: append(weightsOf(group), weightsOf(later)) }),
-    ...((censoring ?? later.censoring) && {
-      censoring: mapped(group.values, (_column, state) =>
-        Int8Array.from([...Array.from(marks(group, state)), ...Array.from(marks(later, state))]),
-      ),
-    }),
-  };
-}
-
-function weightsOf(group: ObservedGroup): Float64Array {
-  return group.weights ?? new Float64Array(group.index.length).fill(1);
-}
-
-function mapped<A, B>(
-  columns: Readonly<Record<string, A>>,
-  of: (column: A, name: string) => B,
-): Record<string, B> {
-  return Object.fromEntries(Object.entries(columns).map(([name, column]) => [name, of(column, name)]));
+  return { kind: "updated-fit", fit: now, added, changes, remarks };
 }
 
 function changesOf(was: Fit["groups"][number], now: Fit["groups"][number]): EstimateChange[] {

@@ -64,13 +64,13 @@ export function densityDependence(
     return groupDensity(group, state, resamples, level, own);
   });
   const sentence = groups.map((group) => group.sentence).join(" ");
-  return Object.freeze({
+  return {
     kind: "density-dependence",
     resamples,
     level,
-    groups: Object.freeze(groups),
+    groups,
     sentence,
-  });
+  };
 }
 
 function groupDensity(

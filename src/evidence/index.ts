@@ -12,6 +12,7 @@ export type { Window } from "./check/windows.js";
 export { type CompareOptions, type Comparison, compare, type RivalDecision } from "./compare/compare.js";
 export type { ComparisonRow } from "./compare/comparison-row.js";
 export type { LikelihoodRatio } from "./compare/likelihood-ratio.js";
+export { type SameParameters, sameParameters } from "./compare/same-parameters.js";
 export {
   type DensityDependence,
   type DensityOptions,

@@ -52,6 +52,29 @@ export function refuseNoDates(group: string, count: number): ModelError {
   );
 }
 
+export function notSeveralGroups(count: number): ModelError {
+  return new ModelError(
+    "not-several-groups",
+    `Whether groups have the same parameters is asked of a fit with several groups, with \`groups: "separate"\` or "combined"; this one has ${count}${count > 1 ? ", mixed" : ""}. Name the column that tells them apart with \`by\` in observations(...).`,
+    { count },
+  );
+}
+
+/** Fits whose record is not searched for a break. */
+export function refuseUnsearched(
+  what: "counts" | "censored" | "together",
+  distribution?: string,
+): ModelError {
+  const said = {
+    counts: `A break is searched for by least squares, and \`distribution: "${distribution}"\` is fitted by another likelihood. Write \`distribution: "normal"\`, or "lognormal" where no count is 0; the probability is then rough, because the scatter of counts changes with their level.`,
+    censored:
+      "A break is searched for by least squares, and this record has censored values. Leave the censored rows out with a reason, or fit the parts of the record before and after a date with `fit` and compare their intervals.",
+    together:
+      'A break is searched for in each group by itself, every reading counting in full. Leave `groups` and `robust` out, or write `groups: "separate"`.',
+  }[what];
+  return new ModelError("break-not-searched", said, { what, distribution });
+}
+
 export function refuseNoDensity(group: string, state: string): ModelError {
   const who = group === "" ? "" : ` of "${group}"`;
   return new ModelError(

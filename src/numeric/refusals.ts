@@ -70,3 +70,34 @@ export function otherNumberOf(what: string, expected: number, found: number): Mo
     { what, expected, found },
   );
 }
+
+export function badDistributionParameter(
+  distribution: string,
+  parameter: string,
+  required: string,
+  value: unknown,
+  example: string,
+): ModelError {
+  return new ModelError(
+    "bad-distribution-parameter",
+    `Parameter \`${parameter}\` of \`distributions.${distribution}\` must be ${required}; ${String(value)} was given. Write, for example, \`${example}\`.`,
+    { distribution, parameter, value },
+  );
+}
+
+export function badProbability(asked: string, probability: unknown): ModelError {
+  const isPercentage = typeof probability === "number" && probability > 1 && probability <= 100;
+  return new ModelError(
+    "bad-probability",
+    `A probability must be a number from 0 to 1; ${String(probability)} was given to \`${asked}\`. Write \`${asked}(${isPercentage ? probability / 100 : 0.95})\`.`,
+    { probability },
+  );
+}
+
+export function badValue(asked: string, value: unknown): ModelError {
+  return new ModelError(
+    "bad-value",
+    `\`${asked}\` takes one number; ${String(value)} was given. Give a single number, as in \`${asked}(3)\`; for a list, call it for each value with \`map\`.`,
+    { value },
+  );
+}

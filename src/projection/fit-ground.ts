@@ -1,105 +1,94 @@
-import type { Fit, GroupFit } from "../estimate/index.js";
-import type { ObservedGroup } from "../record/index.js";
+import { type InputPlans, plannedInputs } from "../dynamics/index.js";
+import { type Beginning, type Fit, type GroupFit, problemOf } from "../estimate/index.js";
+import { inputByPeriod, type ObservedGroup, periodWords } from "../record/index.js";
 import { compileRule, type Rule } from "../rule/index.js";
 import type { Ground } from "./central-path.js";
-import type { InputPlans } from "./inputs/input-plan.js";
-import { plannedInputs } from "./inputs/planned-inputs.js";
+import { startNames } from "./levels.js";
 import { refuseGap } from "./refusals.js";
+
+/** What a record reads of a state: a multiple of it. */
+export interface StateFactor {
+  readonly name: string;
+  readonly value: number;
+  /** Among the unknowns of the fit. */
+  readonly unknown: number;
+}
 
 /** A ground, and where the fit's unknowns stand in it. */
 export interface FitGround extends Ground {
   readonly group: GroupFit;
   readonly recorded: ObservedGroup;
-  /** Step index of the last recorded value. */
+  /** Index of the period that the future starts after: of the last recorded value, unless an earlier one was asked for. */
   readonly recordEnd: number;
   /** By unknown of the fit: slot among parameters, then state vector; -1 where the path does not begin with it. */
   readonly places: Int32Array;
-  /** Where a filter leaves the present state uncertain: its mean and covariance, on the log scale or not. */
-  readonly belief?: { readonly mean: Float64Array; readonly covariance: Float64Array; readonly log: boolean };
+  /** By state that the record reads through a factor: the factor's name and value, and its place among the unknowns. */
+  readonly factors: readonly (StateFactor | undefined)[];
+  /** Where a filter leaves the present state uncertain. */
+  readonly belief?: NonNullable<Beginning["belief"]>;
 }
 
 /**
  * Where the future of a fitted group begins: a trajectory at its own start, a chain of steps at the last recorded value.
  *
- * @param periods - beyond the last recorded one.
+ * @param periods - beyond the one that the future starts after.
+ * @param startsAfter - index of that period; default the last recorded one.
  */
-export function fitGround(fit: Fit, group: GroupFit, periods: number, plans: InputPlans): FitGround {
-  const { rule, observations } = fit;
-  const recorded = observations.groups.find((each) => each.name === group.group)!;
-  const recordEnd = recorded.index[recorded.index.length - 1]!;
-  const trajectory = fit.options.errors === "observation";
-  const reach = Math.max(0, ...rule.lags.map(({ lag }) => lag));
-  const from = trajectory ? reach : recordEnd;
-  const slots = [...rule.states.map((state) => ({ state, lag: 0 })), ...rule.lags];
-  const names = slots.map(({ state, lag }) => `${state}[${reach - lag}]`);
-  const belief = beliefOf(fit, group);
-  const initial = Float64Array.from(slots, ({ state, lag }, s) => {
-    if (belief !== undefined) return belief.log ? Math.exp(belief.mean[s]!) : belief.mean[s]!;
-    if (trajectory) return fittedStart(fit, group, names[s]!, state, lag);
-    return recordedAt(recorded, state, recordEnd - lag);
-  });
-  const width = rule.parameters.length;
-  const places = Int32Array.from(group.estimates, ({ name, role }) => {
-    if (role === "parameter") return rule.parameters.indexOf(name);
-    const slot = names.indexOf(name);
-    return slot < 0 || !trajectory ? -1 : width + slot;
+export function fitGround(
+  fit: Fit,
+  group: GroupFit,
+  periods: number,
+  plans: InputPlans,
+  startsAfter?: number,
+): FitGround {
+  const { rule } = fit;
+  const { recorded, beginning } = problemOf(fit).group(group.group);
+  const recordEnd = startsAfter ?? recorded.index[recorded.index.length - 1]!;
+  const { period: from, fromStart, initial, places, belief } = beginning(recordEnd);
+  [...rule.states.map((state) => ({ state, lag: 0 })), ...rule.lags].forEach(({ state, lag }, s) => {
+    if (!Number.isFinite(initial[s]!)) throw refuseGap(state, periodWords(recorded.axis, from - lag));
   });
   return {
     rule,
     compiled: compileRule(rule),
     parameters: Float64Array.from(rule.parameters, (name) => group.parameters[name]!),
     initial,
-    inputs: fittedInputs(rule, recorded, recordEnd, periods, plans),
+    inputs: plannedInputs(rule, plans, {
+      axis: recorded.axis,
+      group: group.group,
+      recorded: (input) => inputByPeriod(recorded, input),
+      from,
+      first: recordEnd + 1,
+      last: recordEnd + periods,
+    }),
     from,
     periods: recordEnd + periods - from,
     group,
     recorded,
     recordEnd,
+    present: recordEnd - from,
     places,
+    startNames: fromStart ? startNames(rule) : [],
+    firstValues: fromStart ? {} : firstRecorded(rule, recorded),
+    factors: factorsOf(fit, group),
     ...(belief && { belief }),
   };
 }
 
-function beliefOf(fit: Fit, { filter }: GroupFit): FitGround["belief"] {
-  if (filter === undefined) return undefined;
-  return {
-    mean: Float64Array.from(filter.last.mean),
-    covariance: Float64Array.from(filter.last.covariance),
-    log: fit.options.distribution === "lognormal",
-  };
+function firstRecorded(rule: Rule, recorded: ObservedGroup): Readonly<Record<string, number>> {
+  const known = rule.states.map(
+    (state) => [`${state}[0]`, recorded.values[state]?.[0] ?? Number.NaN] as const,
+  );
+  return Object.fromEntries(known.filter(([, value]) => Number.isFinite(value)));
 }
 
-function fittedStart(fit: Fit, group: GroupFit, name: string, state: string, lag: number): number {
-  const estimated = group.estimates.find((estimate) => estimate.name === name);
-  if (estimated !== undefined) return estimated.value;
-  const given = fit.options.initial?.[state] ?? group.initial[state]!;
-  return typeof given === "number" ? given : given[given.length - 1 - lag]!;
-}
-
-function recordedAt(recorded: ObservedGroup, state: string, period: number): number {
-  const row = recorded.index.indexOf(period);
-  const value = row < 0 ? Number.NaN : recorded.values[state]![row]!;
-  if (!Number.isFinite(value)) throw refuseGap(state, period);
-  return value;
-}
-
-function fittedInputs(
-  rule: Rule,
-  recorded: ObservedGroup,
-  recordEnd: number,
-  periods: number,
-  plans: InputPlans,
-): readonly Float64Array[] {
-  return plannedInputs(rule, plans, {
-    recorded: (input) => {
-      const column = new Float64Array(recordEnd + 1).fill(Number.NaN);
-      recorded.index.forEach((period, row) => {
-        column[period] = recorded.inputs[input]?.[row] ?? Number.NaN;
-      });
-      return column;
-    },
-    rows: recordEnd + 1,
-    last: recordEnd + periods,
-    firstNumber: 1,
+function factorsOf(fit: Fit, { estimates }: GroupFit): FitGround["factors"] {
+  const { factors } = problemOf(fit);
+  return fit.rule.states.map((state) => {
+    const name = factors[state];
+    const unknown = estimates.findIndex((estimate) => estimate.name === name && estimate.role === "factor");
+    return name === undefined || unknown < 0
+      ? undefined
+      : { name, value: estimates[unknown]!.value, unknown };
   });
 }

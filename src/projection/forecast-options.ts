@@ -1,12 +1,14 @@
-import type { Watch } from "./ensemble/passage.js";
-import type { InputPlans } from "./inputs/input-plan.js";
+import type { InputPlans } from "../dynamics/index.js";
+import type { Watch } from "./ensemble/placed-watches.js";
 import type { Scenarios } from "./inputs/scenarios.js";
 
 /** Options of `forecast`. */
 export interface ForecastOptions {
   /** Whole periods beyond the last recorded one. */
   readonly periods: number;
-  /** By input, the first period ahead first; needed for every input of the rule. */
+  /** The recorded period to start after, by its label or number, or one a group; default the last one. */
+  readonly from?: string | number | { readonly byGroup: Readonly<Record<string, string | number>> };
+  /** By input, the first period ahead first; needed for every input that the record does not hold so far ahead. */
   readonly inputs?: InputPlans;
   /** Several plans of inputs side by side, run with the same random numbers. */
   readonly scenarios?: Scenarios;

@@ -3,6 +3,7 @@ import { randomStream } from "../numeric/index.js";
 import { checkRun } from "./check-run.js";
 import { forecastGroup } from "./forecast-group.js";
 import type { ForecastOptions, ForecastSettings } from "./forecast-options.js";
+import { checkPlansByGroup, checkStartsByGroup } from "./inputs/plans-by-group.js";
 import { scenariosOf } from "./inputs/scenarios.js";
 import type { GroupForecast } from "./projected-group.js";
 
@@ -27,7 +28,8 @@ export interface Forecast {
  * predictability; beyond it stand the bands, with a warning.
  *
  * @returns per group and scenario central path, bands [index] in the state's unit, and the draws themselves.
- * @throws {ModelError} `periods-not-whole` | `future-input-missing` | `parameters-not-separated` | `no-finite-path` |
+ * @throws {ModelError} `periods-not-whole` | `future-input-missing` | `plan-not-by-group` | `start-not-readable` |
+ *   `parameters-not-separated` | `no-finite-path` |
  *   `history-missing` | `no-draw-in-bounds`.
  * @example forecast(fitted, { periods: 12 }).groups[0].states[0].central.length; // recorded periods + 12
  */
@@ -36,16 +38,18 @@ export function forecast(fit: Fit, options: ForecastOptions): Forecast {
   checkRun(periods, paths, levels);
   const settings = { periods, levels, paths, seed };
   const scenarios = scenariosOf(options);
+  for (const { plans } of scenarios) checkPlansByGroup(fit, plans);
+  checkStartsByGroup(fit, options.from);
   let stream = randomStream(seed);
   const groups = fit.groups.flatMap((group) => {
     const own = stream;
     stream = stream.jump();
     return forecastGroup(fit, group, scenarios, { ...options, ...settings }, own);
   });
-  return Object.freeze({
+  return {
     kind: "forecast",
     fit,
-    options: Object.freeze(settings),
-    groups: Object.freeze(groups),
-  });
+    options: settings,
+    groups,
+  };
 }

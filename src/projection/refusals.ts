@@ -26,39 +26,42 @@ export function refuseLevel(level: number): ModelError {
   );
 }
 
-/** @param recorded - how many of the first steps read what is recorded. */
-export function refuseFutureInput(inputs: readonly string[], periods: number, recorded: number): ModelError {
-  const why =
-    recorded <= 0
-      ? ""
-      : ` (the first ${recorded === 1 ? "step reads the last recorded value" : `${recorded} steps read recorded values`})`;
+export function refuseSharedPlan(input: string, last: ReadonlyMap<string, number>): ModelError {
+  const told = [...last].slice(0, 4);
+  const more = last.size > told.length ? ", ..." : "";
   return new ModelError(
-    "future-input-missing",
-    `The rule needs ${inputs.join(", ")} for the next ${periods} ${periods === 1 ? "period" : "periods"}${why}; supply a scenario, such as inputs: { ${inputs[0]}: { usual: 0 } }.`,
-    { inputs, periods },
+    "plan-not-by-group",
+    `One plan for \`${input}\` would hold for groups whose last recorded values differ: ${told.map(([name, value]) => `${name} ${value}`).join(", ")}${more}. ` +
+      `Give each its own: inputs: { ${input}: { byGroup: { ${told.map(([name, value]) => `${JSON.stringify(name)}: ${value}`).join(", ")}${more} } } }.`,
+    { input, last: Object.fromEntries(last) },
   );
 }
 
-export function refuseUnknownInput(name: string, inputs: readonly string[]): ModelError {
-  const [near] = nearestNames(name, inputs);
+export function refuseStrangeGroup(where: string, group: string, groups: readonly string[]): ModelError {
+  const [near] = nearestNames(group, groups);
   const hint = near === undefined ? "" : ` Did you mean "${near}"?`;
   return new ModelError(
-    "unknown-input",
-    `The rule has no input "${name}". It has: ${inputs.length === 0 ? "none" : inputs.join(", ")}.${hint}`,
-    { name, inputs },
+    "plan-not-readable",
+    `${where}: the fit has no group "${group}". It has: ${groups.map((name) => name || "a single group without a name").join(", ")}.${hint}`,
+    { group, groups },
   );
 }
 
-export function refuseShortPlan(name: string, given: number, needed: number): ModelError {
+export function refuseFrom(from: string | number, first: string, last: string): ModelError {
   return new ModelError(
-    "future-input-missing",
-    `The plan of ${name} has ${given} values and the projection needs ${needed}. Give one for each period, or { usual, from, at }.`,
-    { name, given, needed },
+    "start-not-readable",
+    `Option \`from\`: ${from} is no recorded period to start after; the record runs from ${first} to ${last}.`,
+    { from, first, last },
   );
 }
 
-export function refusePlan(name: string, why: string): ModelError {
-  return new ModelError("plan-not-readable", `The plan of ${name} cannot be followed: ${why}.`, { name });
+export function refuseFilteredStart(from: string | number): ModelError {
+  return new ModelError(
+    "start-not-readable",
+    `Option \`from\`: with errors: "both" the present state is known after the last recorded period only, not after ${from}. ` +
+      "Fit the record up to there (option `where` or `rows` of `observations`) and forecast that fit.",
+    { from },
+  );
 }
 
 export function refuseNoScenario(): ModelError {
@@ -101,10 +104,10 @@ export function refuseNoDraws(group: string): ModelError {
   );
 }
 
-export function refuseGap(state: string, period: number): ModelError {
+export function refuseGap(state: string, period: string): ModelError {
   return new ModelError(
     "history-missing",
-    `The rule reads ${state} at period ${period}, which the record does not hold; a projection cannot begin. Fit with errors: "observation", or supply the value.`,
+    `The rule reads ${state} at ${period}, which the record does not hold; a projection cannot begin. Fit with errors: "observation", or supply the value.`,
     { state, period },
   );
 }
@@ -115,10 +118,46 @@ export function refuseNoise(state: string, why: string): ModelError {
   });
 }
 
-export function refuseWatch(state: string, states: readonly string[]): ModelError {
+export function refuseProjectedName(name: string, known: readonly string[]): ModelError {
+  const [near] = nearestNames(name, known);
+  const hint = near === undefined ? "" : ` Did you mean "${near}"?`;
   return new ModelError(
-    "unknown-state",
-    `"${state}" cannot be watched: the rule's states are ${states.join(", ")}.`,
-    { state, states },
+    "unknown-name",
+    `The projection has no state or quantity "${name}". It has: ${known.join(", ")}.${hint}`,
+    { name, known },
+  );
+}
+
+export function refuseNoLevel(name: string): ModelError {
+  return new ModelError(
+    "level-missing",
+    `Which level of ${name}? Give one of \`risesTo\` and \`fallsTo\`, as in { risesTo: 120 } or { fallsTo: 0 }.`,
+    { name },
+  );
+}
+
+export function refuseLevelValue(name: string, value: unknown): ModelError {
+  return new ModelError(
+    "level-not-finite",
+    `The level of ${name} must be a finite number; ${String(value)} was given.`,
+    { name, value },
+  );
+}
+
+export function refuseLevelBeyond(name: string, level: number, low: number, high: number): ModelError {
+  return new ModelError(
+    "level-beyond-bounds",
+    `${name} cannot reach ${level}: the rule bounds it to ${low} to ${high}. Ask for a level within them, or give the rule other \`bounds\`.`,
+    { name, level, low, high },
+  );
+}
+
+export function refuseLevelName(name: string, known: readonly string[]): ModelError {
+  const [near] = nearestNames(name, known);
+  const hint = near === undefined ? "" : ` Did you mean "${near}"?`;
+  return new ModelError(
+    "unknown-name",
+    `A level is taken of a parameter or a first value, and there is no "${name}". There are: ${known.join(", ")}.${hint}`,
+    { name, known },
   );
 }

@@ -1,41 +1,47 @@
-import { type InitialValues, initialVector, parametersBySlot } from "../dynamics/index.js";
+import {
+  type InitialValues,
+  type InputPlans,
+  initialFrom,
+  initialVector,
+  inputsFrom,
+  parametersBySlot,
+  type RunStart,
+  runStart,
+  type StartOptions,
+} from "../dynamics/index.js";
 import { randomStream } from "../numeric/index.js";
+import { labelsAt, type PeriodAxis, periodWords } from "../record/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../rule/index.js";
-import { centralPath, type Ground, stateLimits } from "./central-path.js";
+import { centralPath, type Ground } from "./central-path.js";
 import { checkRun, keepLimit } from "./check-run.js";
 import { blockStreams } from "./ensemble/block-streams.js";
 import { runEnsemble } from "./ensemble/ensemble.js";
 import { gatherer } from "./ensemble/gather.js";
-import type { Watch } from "./ensemble/passage.js";
-import { passagesOf, placedWatches } from "./ensemble/placed-watches.js";
+import { passagesOf, placedWatches, type Watch } from "./ensemble/placed-watches.js";
 import { growthWarnings } from "./growth-warnings.js";
-import type { InputPlans } from "./inputs/input-plan.js";
-import { plannedInputs } from "./inputs/planned-inputs.js";
-import { type Scenarios, scenariosOf } from "./inputs/scenarios.js";
+import { type Scenario, type Scenarios, scenariosOf } from "./inputs/scenarios.js";
+import { levelSource, startNames } from "./levels.js";
 import { type Noise, noiseDraw } from "./noise/noise.js";
 import { ruleNoise } from "./noise/rule-noise.js";
 import type { GroupForecast } from "./projected-group.js";
 import { rangeWarnings } from "./range-warnings.js";
+import { observableRange, runBounds } from "./state-range.js";
 
 /** Options of `simulate`. */
-export interface SimulateOptions {
+export interface SimulateOptions extends StartOptions {
   /** By parameter; those the rule holds fixed may be left out. */
   readonly parameters?: Readonly<Record<string, number>>;
   /** By state; those the rule states may be left out. With lags a list, oldest first. */
   readonly initial?: InitialValues;
   readonly periods: number;
-  /** By input, period 0 first. */
+  /** By input: what it will be, from the first period on. */
   readonly inputs?: InputPlans;
   /** Several plans of inputs side by side, run with the same random numbers. */
   readonly scenarios?: Scenarios;
   /** By state: the random change of each period; default what the rule says. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** By state: the error of a reading, reported and not carried on. */
+  /** By state: the error of an observation, reported and not carried on. */
   readonly observationNoise?: Readonly<Record<string, Noise>>;
-  /** What a period is called, as in "month"; default "period". */
-  readonly period?: string;
-  /** What the first period is numbered, as the last recorded month is; default 0. */
-  readonly startsAt?: number;
   /** Default 4000, or 1 where nothing is random. */
   readonly paths?: number;
   /** Levels of the bands; default 0.5, 0.8, 0.95. */
@@ -53,6 +59,8 @@ export interface Simulation {
   readonly kind: "simulation";
   readonly rule: Rule;
   readonly parameters: Readonly<Record<string, number>>;
+  /** The axis of its periods. */
+  readonly axis: PeriodAxis;
   readonly options: {
     readonly periods: number;
     readonly paths: number;
@@ -73,7 +81,7 @@ export interface Simulation {
  *
  * @returns by scenario the central path, median, bands [periods + 1] in the state's unit, and first passages.
  * @throws {ModelError} `periods-not-whole` | `paths-not-whole` | `missing-value` | `unknown-name` |
- *   `future-input-missing` | `noise-not-readable`.
+ *   `future-input-missing` | `plan-not-readable` | `start-not-readable` | `noise-not-readable`.
  * @example
  * const rule = recurrence("N[t+1] = R*N");
  * simulate(rule, { parameters: { R: 1.1 }, initial: { N: 100 }, periods: 10, noise: { N: { distribution: "lognormal", sd: 0.2, centre: "mean" } } });
@@ -85,41 +93,58 @@ export function simulate(rule: Rule, options: SimulateOptions): Simulation {
   const random = change.some((noise) => noise !== undefined) || options.observationNoise !== undefined;
   const paths = options.paths ?? (random ? 4000 : 1);
   checkRun(periods, paths, levels);
-  const initial = initialVector(rule, options.initial);
+  const start = runStart(options);
+  const { from, axis } = start;
+  const initial = initialVector(rule, initialFrom(rule, start, options.initial));
   const compiled = compileRule(rule);
-  const settings = { periods, paths, seed, levels, period: options.period ?? "period" };
+  const settings = { periods, paths, seed, levels, period: axis.unit };
   const groups = scenariosOf(options).map(({ name, plans }) => {
-    const inputs = plannedInputs(rule, plans, { recorded: () => [], rows: 0, last: periods, firstNumber: 0 });
-    const ground = { rule, compiled, parameters, initial, inputs, from: 0, periods };
-    return simulated(ground, name, plans, { ...options, ...settings }, change);
+    const inputs = inputsFrom(rule, start, periods, plans);
+    const own = { startNames: startNames(rule), firstValues: {}, present: 0 };
+    const ground = { rule, compiled, parameters, initial, inputs, from, periods, ...own };
+    return simulated(ground, start, { name, plans }, { ...options, ...settings }, change);
   });
-  return Object.freeze({
+  return {
     kind: "simulation",
     rule,
-    parameters: Object.freeze(Object.fromEntries(rule.parameters.map((name, i) => [name, parameters[i]!]))),
-    options: Object.freeze(settings),
-    groups: Object.freeze(groups),
-  });
+    parameters: Object.fromEntries(rule.parameters.map((name, i) => [name, parameters[i]!])),
+    axis,
+    options: settings,
+    groups,
+  };
 }
 
-type Settled = SimulateOptions & Required<Pick<SimulateOptions, "paths" | "seed" | "levels">>;
+type Settled = Omit<SimulateOptions, "period"> &
+  Required<Pick<SimulateOptions, "paths" | "seed" | "levels">> & { readonly period: string };
 
 function simulated(
   ground: Ground,
-  scenario: string,
-  plans: InputPlans,
+  { from, axis, recorded }: RunStart,
+  { name: scenario, plans }: Scenario,
   options: Settled,
   change: readonly (Noise | undefined)[],
 ): GroupForecast {
   const { rule, compiled, periods } = ground;
   const { paths } = options;
   const central = centralPath(ground);
-  const watches = placedWatches(rule, options.watch);
-  const keep = paths * (periods + 1) * rule.states.length <= keepLimit;
+  const states = rule.states.length;
+  const quantities = rule.quantities.length;
+  const keep = paths * (periods + 1) * (states + quantities) <= keepLimit;
+  const starts = {
+    paths,
+    size: ground.parameters.length,
+    parameters: ground.parameters,
+    initial: ground.initial,
+  };
+  const levels = levelSource(ground, starts);
+  const watches = placedWatches(rule, options.watch, levels, 0);
+  const draws = change.map((noise) => noise && noiseDraw(noise));
+  const bounds = runBounds(rule, draws);
   const found = gatherer({
     kind: "simulated path",
     levels: options.levels,
-    states: rule.states.length,
+    states,
+    quantities,
     paths,
     periods,
     keep,
@@ -127,53 +152,69 @@ function simulated(
   });
   runEnsemble({
     compiled,
-    states: rule.states.length,
+    bounds,
+    observable: observableRange(rule),
     width: ground.initial.length,
     inputs: ground.inputs,
-    from: 0,
+    from,
     periods,
-    starts: { paths, size: ground.parameters.length, parameters: ground.parameters, initial: ground.initial },
-    change: change.map((noise) => noise && noiseDraw(noise)),
+    starts,
+    change: draws,
     reading: rule.states.map((state) => {
       const noise = options.observationNoise?.[state];
       return noise && noiseDraw(noise);
     }),
-    limits: stateLimits(rule),
+    quantities: keep || watches.some(({ place }) => place >= states) ? quantities : 0,
     streams: blockStreams(randomStream(options.seed), paths),
     onRow: found.onRow,
-    ...(options.onProgress && { onProgress: options.onProgress }),
+    onProgress: options.onProgress,
   });
-  const states = found.states();
-  const index = Array.from({ length: periods + 1 }, (_, t) => t);
-  const left = found.ended[periods]! / paths;
+  const gathered = found.states();
+  const index = Array.from({ length: periods + 1 }, (_, t) => from + t);
+  const first = recorded?.time[0] ?? (axis.counts === "numbers" ? axis.origin : 0);
+  const left = found.ended() / paths;
   return {
     group: "",
     scenario,
     plans,
+    axis,
     index,
-    time: index.map((t) => t + (options.startsAt ?? 0)),
-    recordEnd: 0,
+    time: index.map((t) => first + t * axis.step.every),
+    ...(axis.counts !== "numbers" && { labels: labelsAt(axis, index) }),
+    recordEnd: from,
     states: rule.states.map((state, s) => ({
       state,
       unit: rule.units[state] ?? "",
       central: central.values[s]!,
-      median: states[s]!.median,
-      bands: states[s]!.bands,
-      ...(states[s]!.growth && { growth: states[s]!.growth }),
+      median: gathered[s]!.median,
+      bands: gathered[s]!.bands,
+      ...(gathered[s]!.growth && { growth: gathered[s]!.growth }),
     })),
     ensemble: {
       paths,
       periods,
       mean: [],
-      future: keep ? states.map((state) => state.paths!) : [],
+      future: keep ? gathered.map((state) => state.paths!) : [],
+      process: found.process,
+      passed: found.passed,
+      central: central.kept,
+      levels: { central: levels, paths: levels },
       discarded: 0,
     },
     passages: passagesOf(watches, found.passages),
     left,
     leftError: Math.sqrt((left * (1 - left)) / paths),
     warnings: [
-      ...rangeWarnings(central, options.startsAt ?? 0, left, paths),
-      ...growthWarnings(rule, found.states(), options.period ?? "period"),
+      ...rangeWarnings({
+        rule,
+        central,
+        period: (row) => periodWords(axis, from + row),
+        left,
+        paths,
+        bounds,
+        passed: found.passed,
+      }),
+      ...growthWarnings(rule, gathered, options.period),
     ],
   };
 }

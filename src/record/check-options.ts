@@ -6,8 +6,6 @@ type Option = keyof ObservationOptions;
 
 /** Options that take one of a few words. */
 const choices: Partial<Record<Option, readonly string[]>> = {
-  measured: ["level", "flow"],
-  duplicates: ["refuse", "average", "sum", "first", "last"],
   disorder: ["refuse", "sort"],
   offStep: ["refuse", "nearest"],
 };
@@ -18,7 +16,8 @@ const texts: readonly Option[] = ["value", "replicates", "weight", "order"];
 const known: readonly string[] = [
   ...Object.keys(choices),
   ...texts,
-  ...["period", "step", "values", "unit", "by", "where", "censored", "inputs", "identities"],
+  ...["period", "step", "values", "unit", "by", "where", "rows", "censored"],
+  ...["measured", "inputs", "duplicates", "identities"],
 ];
 
 /**

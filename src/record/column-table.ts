@@ -32,6 +32,19 @@ export function columnNamed(table: ColumnTable, name: string, askedFor: string):
 }
 
 /**
+ * The table with names free of spaces and invisible characters at their ends, such as a carriage return that a file
+ * left there; a name that would then be another column's stays as it is.
+ */
+export function withPlainNames(table: ColumnTable): ColumnTable {
+  const plain = table.names.map((name) => name.replace(endsUnseen, ""));
+  if (plain.every((name, i) => name === table.names[i])) return table;
+  const isOne = (name: string): boolean => plain.filter((other) => other === name).length === 1;
+  return { ...table, names: plain.map((name, i) => (isOne(name) ? name : table.names[i]!)) };
+}
+
+const endsUnseen = /^[\s\p{Cc}\p{Cf}]+|[\s\p{Cc}\p{Cf}]+$/gu;
+
+/**
  * A table from named columns, such as `{ month: [...], owed: [...] }`.
  *
  * @throws {ModelError} `uneven-columns` when their lengths differ.

@@ -21,30 +21,30 @@ export function findingLog(): FindingLog {
   const decisions: Decision[] = [];
   return {
     decide: (decision) => {
-      decisions.push(Object.freeze(decision));
+      decisions.push(decision);
     },
-    decisions: () => Object.freeze(decisions),
+    decisions: () => decisions,
     note(finding) {
       if (finding.row !== undefined) rows.add(finding.row);
       const count = (counts.get(finding.kind) ?? 0) + 1;
       counts.set(finding.kind, count);
-      if (count <= keptOfAKind) kept.push(Object.freeze(finding));
+      if (count <= keptOfAKind) kept.push(finding);
     },
     flagged: () => rows.size,
     all() {
       const more = [...counts].filter(([, count]) => count > keptOfAKind);
-      return Object.freeze([...kept, ...more.map(([kind, count]) => untold(kind, count - keptOfAKind))]);
+      return [...kept, ...more.map(([kind, count]) => untold(kind, count - keptOfAKind))];
     },
   };
 }
 
 function untold(kind: string, count: number): Finding {
-  return Object.freeze({
+  return {
     kind,
     row: undefined,
     column: "",
     value: "",
     message: `${count} more findings of the kind "${kind}" are counted and not listed.`,
     done: "as for those listed",
-  });
+  };
 }

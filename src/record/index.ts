@@ -23,6 +23,18 @@ export type {
 export { observations } from "./observe.js";
 export { packed } from "./packed.js";
 export type { CalendarName } from "./period/calendar.js";
+export {
+  indexOf,
+  labelAt,
+  labelBetween,
+  labelsAt,
+  type PeriodAxis,
+  periodsAfter,
+  periodWords,
+} from "./period/period-axis.js";
+export { calendarAxis, numberAxis } from "./period/stated-axis.js";
+export { inputByPeriod } from "./series/input-by-period.js";
+export { joined } from "./series/joined.js";
 export { tableOfRows } from "./table-of-rows.js";
 export { type FillOptions, filled } from "./tables/filled.js";
 export type { PeriodsOf } from "./tables/placed-series.js";

@@ -17,16 +17,23 @@ export interface NumberColumn {
  * The numbers of a column. An empty cell is NaN, never zero; any other text is refused with its place.
  *
  * @param signs - when true, "<0.05" and ">3.5" are read as limits; otherwise they are refused with that remedy.
+ * @param isRead - whether a row is read; what the others hold is of no concern, and they are NaN.
  * @throws {ModelError} `not-a-number` | `decimal-sign-unclear`.
  */
-export function numberColumn(column: Column, name: string, signs = false): NumberColumn {
+export function numberColumn(
+  column: Column,
+  name: string,
+  signs = false,
+  isRead: (row: number) => boolean = () => true,
+): NumberColumn {
   if (column instanceof Float64Array) return { values: refuseInfinite(column, name), censoring: undefined };
-  const values = new Float64Array(column.length);
+  const values = new Float64Array(column.length).fill(Number.NaN);
   const sides = signs ? column.map(sideOfLimit) : [];
   for (let i = 0; i < column.length; i++) {
+    if (!isRead(i)) continue;
     const cell = column[i];
     const read = numberOf(sides[i] ? String(cell).trim().slice(1) : cell);
-    if (read === undefined) throw refusalOf(column, i, name);
+    if (read === undefined) throw refusalOf(column, i, name, isRead);
     values[i] = read;
   }
   return { values, censoring: sides.some((side) => side !== 0) ? Int8Array.from(sides) : undefined };
@@ -47,9 +54,16 @@ function numberOf(cell: unknown): number | undefined {
 }
 
 /** Of a column with unread cells the one to name: a cell that is no number by any decimal sign goes before others. */
-function refusalOf(column: readonly unknown[], first: number, name: string): Error {
+function refusalOf(
+  column: readonly unknown[],
+  first: number,
+  name: string,
+  isRead: (row: number) => boolean,
+): Error {
   const separated = (cell: unknown): boolean => typeof cell === "string" && withSeparators.test(cell.trim());
-  const bad = column.findIndex((cell) => numberOf(cell) === undefined && !separated(cell));
+  const bad = column.findIndex(
+    (cell, row) => isRead(row) && numberOf(cell) === undefined && !separated(cell),
+  );
   if (bad >= 0) return notANumber(bad + 1, name, column[bad], remedyFor(column[bad]));
   return decimalSignUnclear(first + 1, name, String(column[first]));
 }

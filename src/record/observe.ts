@@ -2,17 +2,19 @@ import { checkOptions } from "./check-options.js";
 import { checkIdentities } from "./checks/check-identities.js";
 import { checkValues } from "./checks/check-values.js";
 import { refuseMixedUnits } from "./checks/refuse-mixed-units.js";
-import { type ColumnTable, columnNamed, rowCount } from "./column-table.js";
-import { decided, rowsLeftOut } from "./decisions/correct.js";
+import { type ColumnTable, rowCount } from "./column-table.js";
+import { decided } from "./decisions/correct.js";
 import type { Decision } from "./decisions/decision.js";
 import { type FindingLog, findingLog } from "./finding-log.js";
 import type { ObservationOptions } from "./observation-options.js";
 import type { Observations, ObservedGroup } from "./observations.js";
+import { axisOfGroups } from "./period/axis-of-groups.js";
 import { noteMonthEnds } from "./period/note-month-ends.js";
 import { noteSteps } from "./period/note-steps.js";
-import { type PeriodAxis, periodAxis } from "./period/period-axis.js";
-import { inputsOf, readColumns } from "./read-columns.js";
+import { type PlacedRows, placedRows } from "./period/placed-rows.js";
+import { type ReadColumns, readColumns } from "./read-columns.js";
 import { noDataRows, noUsableRows } from "./refusals.js";
+import { chooseRows } from "./series/choose-rows.js";
 import { groupRows } from "./series/group-rows.js";
 import { observedGroup } from "./series/observed-group.js";
 
@@ -26,9 +28,9 @@ import { observedGroup } from "./series/observed-group.js";
  * @param table - the record as columns of equal length, m rows.
  * @param options - which columns hold what, and the length of one step; see {@link ObservationOptions}.
  * @returns groups in the order of their first rows, findings, and counts of rows: read (those that meet
- *   `where`), used, flagged, corrected and refused (left out).
- * @throws {ModelError} `no-data-rows` | `mixed-units` | `identity-unread` | `no-usable-rows` | `option-missing` | `option-unknown` | `option-wrong` | `missing-column` |
- *   `doubled-column` | `not-a-number` | `decimal-sign-unclear` | `step-missing` | `no-period` |
+ *   `where` and `rows`), used, flagged, corrected and refused (left out).
+ * @throws {ModelError} `no-data-rows` | `no-rows-chosen` | `no-such-row` | `mixed-units` | `identity-unread` | `no-usable-rows` | `option-missing` | `option-unknown` | `option-wrong` | `missing-column` |
+ *   `doubled-column` | `unit-unknown` | `not-a-number` | `decimal-sign-unclear` | `step-missing` | `no-period` |
  *   `ambiguous-date` | `no-such-period` | `off-step` | `not-increasing` | `duplicate-period`.
  * @example
  * const table = tableOf({ hours: [0, 12, 36], density: [2, 3.1, 7.4] });
@@ -39,55 +41,49 @@ export function observations(table: ColumnTable, options: ObservationOptions): O
   const read = rowCount(table);
   if (read === 0) throw noDataRows();
   checkOptions(options);
-  const { identities, measured = "level" } = options;
   const log = findingLog();
   noteDecisions(table, log);
   const used = decided(table);
-  const columns = readColumns(used, options);
-  const axis = periodAxis(used, options.period, options.step);
+  const chosen = chooseRows(used, options.where, options.rows);
+  const columns = readColumns(used, options, chosen.isRead);
+  const periods = placedRows(used, options.period, options.step, chosen.isRead);
   const by = typeof options.by === "string" ? [options.by] : (options.by ?? []);
-  const taken = rowsWhere(used, options.where);
-  const out = rowsLeftOut(used);
-  const rows = groupRows(used, by, out.size === 0 ? taken : taken.filter((row) => !out.has(row)), log);
+  const rows = groupRows(used, by, chosen.rows, log);
   refuseMixedUnits(used, rows);
-  const groups = rows.map((group) => observedGroup(group, columns, axis, used, options, log));
-  const kept = groups.filter(({ group }) => group.index.length > 0).map(({ group }) => group);
-  if (kept.length === 0) throw noUsableRows(taken.length);
-  noteSteps(kept, axis, measured, log);
-  noteMonthEnds(kept, axis, log);
-  if (identities)
+  const groups = rows.map((group) => observedGroup(group, columns, periods, used, options, log));
+  const kept = groups.flatMap(({ group }) => group ?? []);
+  if (kept.length === 0) throw noUsableRows(chosen.count);
+  noteSteps(
+    kept,
+    periods,
+    columns.states.every(({ measured }) => measured === "flow"),
+    log,
+  );
+  noteMonthEnds(kept, periods, log);
+  if (options.identities)
     checkIdentities(
       used,
-      identities,
-      rows.map((group) => byPeriod(group.rows, axis)),
+      options.identities,
+      rows.map((group) => byPeriod(group.rows, periods)),
       log,
     );
   for (const group of kept) {
-    for (const state of columns.states)
-      checkValues({ group, state, values: group.values[state.name]!, measured, period: axis.column, log });
+    for (const { name, column, unit, measured = "level" } of columns.states) {
+      const state = { name, column, unit, measured };
+      checkValues({ group, state, values: group.values[name]!, measured, period: periods.column, log });
+    }
   }
-  const standing = groups.reduce((sum, { used }) => sum + used, 0);
-  return assemble(kept, columns.states, axis, options, log, {
-    read: taken.length,
-    used: standing,
+  return assemble(kept, columns, periods, options, log, {
+    aside: read - chosen.count,
+    read: chosen.count,
+    used: groups.reduce((sum, { used }) => sum + used, 0),
     corrections: table.decisions ?? [],
   });
 }
 
 /** Rows by increasing period; of one period in the record's order. */
-function byPeriod(rows: Int32Array, { position }: PeriodAxis): Int32Array {
+function byPeriod(rows: Int32Array, { position }: PlacedRows): Int32Array {
   return rows.slice().sort((a, b) => position[a]! - position[b]! || a - b);
-}
-
-function rowsWhere(table: ColumnTable, where: ObservationOptions["where"] = {}): Int32Array {
-  const all = new Int32Array(rowCount(table));
-  for (let row = 0; row < all.length; row++) all[row] = row;
-  const wanted = Object.entries(where).map(([name, cell]) => ({
-    column: columnNamed(table, name, "a condition"),
-    cell: String(cell),
-  }));
-  if (wanted.length === 0) return all;
-  return all.filter((row) => wanted.every(({ column, cell }) => String(column[row]) === cell));
 }
 
 function noteDecisions({ decisions = [] }: ColumnTable, log: FindingLog): void {
@@ -111,40 +107,49 @@ function noteDecisions({ decisions = [] }: ColumnTable, log: FindingLog): void {
   }
 }
 
+interface Counted {
+  readonly aside: number;
+  readonly read: number;
+  readonly used: number;
+  readonly corrections: readonly Decision[];
+}
+
 function assemble(
   groups: readonly ObservedGroup[],
-  states: Observations["states"],
-  axis: PeriodAxis,
+  columns: ReadColumns,
+  periods: PlacedRows,
   options: ObservationOptions,
   log: FindingLog,
-  {
-    read,
-    used,
-    corrections,
-  }: { readonly read: number; readonly used: number; readonly corrections: readonly Decision[] },
+  { aside, read, used, corrections }: Counted,
 ): Observations {
-  const { step, name } = axis.calendar;
   const decisions = log.decisions();
   const corrected = new Set(decisions.map(({ row }) => row)).size;
   const settled = corrected - new Set(corrections.map(({ row }) => row)).size;
-  return Object.freeze({
+  const flows = columns.inputs.filter(({ measured }) => measured === "flow").map(({ name }) => name);
+  return {
     kind: "observations",
-    groups: Object.freeze(groups),
-    ...(options.by !== undefined && { by: Object.freeze([options.by].flat()) }),
-    states: Object.freeze(states.map((state) => Object.freeze(state))),
-    inputs: Object.freeze(inputsOf(options).map(([input]) => input)),
-    period: Object.freeze({ column: axis.column, unit: step.of, step, ...(name && { calendar: name }) }),
-    measured: options.measured ?? "level",
+    groups,
+    ...(options.by !== undefined && { by: [options.by].flat() }),
+    states: columns.states.map(({ name, column, unit, measured = "level" }) => ({
+      name,
+      column,
+      unit,
+      measured,
+    })),
+    inputs: columns.inputs.map(({ name }) => name),
+    ...(flows.length > 0 && { flows }),
+    axis: axisOfGroups(groups, periods),
     order: options.order ?? "",
     findings: log.all(),
     ...(decisions.length > 0 && { decisions }),
-    counts: Object.freeze({
+    counts: {
+      ...(aside > 0 && { aside }),
       read,
       used,
       flagged: log.flagged(),
       corrected,
       ...(settled > 0 && { settled }),
       refused: read - used,
-    }),
-  });
+    },
+  };
 }

@@ -1,41 +1,55 @@
+import { type ColumnChoice, columnChoices } from "./column-choices.js";
 import { type ColumnTable, columnNamed, isEmpty, rowCount } from "./column-table.js";
-import { numberColumn } from "./number-column.js";
+import { type NumberColumn, numberColumn } from "./number-column.js";
 import type { CensoringLimits, ObservationOptions } from "./observation-options.js";
 import type { ObservedState } from "./observations.js";
 import { optionMissing, optionWrong } from "./refusals.js";
 
-/** The columns that the options name, as numbers, one entry a row of the record. */
+/** A column that the options name, as numbers, one entry a row of the record; NaN where a cell is empty. */
+export interface ReadColumn extends ColumnChoice {
+  readonly values: Float64Array;
+}
+
+export interface ReadState extends ReadColumn {
+  readonly unit: string;
+  readonly censoring: Int8Array | undefined;
+}
+
+/** The columns that the options name. */
 export interface ReadColumns {
-  readonly states: readonly ObservedState[];
-  /** By state, in the order of `states`. */
-  readonly values: readonly Float64Array[];
-  readonly censoring: readonly (Int8Array | undefined)[];
-  readonly inputs: ReadonlyMap<string, Float64Array>;
+  readonly states: readonly ReadState[];
+  readonly inputs: readonly ReadColumn[];
   readonly weights: Float64Array | undefined;
 }
 
 /** Reads every column that the options name as numbers. */
-export function readColumns(table: ColumnTable, options: ObservationOptions): ReadColumns {
-  const states = statesOf(options);
-  const signs = options.censored === "signs";
-  const read = states.map(({ column }) => numberColumn(columnNamed(table, column, "a value"), column, signs));
+export function readColumns(
+  table: ColumnTable,
+  options: ObservationOptions,
+  isRead: (row: number) => boolean,
+): ReadColumns {
+  const [states, inputs] = [statesOf(options), inputsOf(options)];
+  const choices = columnChoices(states, inputs, options);
   const limits = typeof options.censored === "object" ? options.censored : undefined;
+  const numbers = (column: string, askedFor: string, signs = false): NumberColumn =>
+    numberColumn(columnNamed(table, column, askedFor), column, signs, isRead);
   return {
-    states,
-    values: read.map(({ values }) => values),
-    censoring: read.map(({ values, censoring }) => (limits ? beyond(table, values, limits) : censoring)),
-    inputs: new Map(
-      inputsOf(options).map(([name, column]) => [name, plainNumbers(table, column, "an input")]),
-    ),
-    weights: options.weight === undefined ? undefined : weightsOf(table, options.weight),
+    states: states.map(({ column, unit }, i) => {
+      const { values, censoring } = numbers(column, "a value", options.censored === "signs");
+      return { ...choices[i]!, unit, values, censoring: limits ? beyond(table, values, limits) : censoring };
+    }),
+    inputs: inputs.map(([, column], i) => ({
+      ...choices[states.length + i]!,
+      values: numbers(column, "an input").values,
+    })),
+    weights:
+      options.weight === undefined
+        ? undefined
+        : positive(numbers(options.weight, "the weights").values, options.weight, isRead),
   };
 }
 
-function plainNumbers(table: ColumnTable, column: string, askedFor: string): Float64Array {
-  return numberColumn(columnNamed(table, column, askedFor), column).values;
-}
-
-function statesOf(options: ObservationOptions): readonly ObservedState[] {
+function statesOf(options: ObservationOptions): readonly Omit<ObservedState, "measured">[] {
   const named = options.values ?? (options.value === undefined ? {} : { [options.value]: options.value });
   const states = Object.entries(named);
   if (states.length === 0)
@@ -50,13 +64,12 @@ function unitOf({ unit }: ObservationOptions, state: string, column: string): st
 }
 
 /** Input name and column of every input. */
-export function inputsOf({ inputs = [] }: ObservationOptions): readonly (readonly [string, string])[] {
+function inputsOf({ inputs = [] }: ObservationOptions): readonly (readonly [string, string])[] {
   return Array.isArray(inputs) ? inputs.map((name: string) => [name, name]) : Object.entries(inputs);
 }
 
-function weightsOf(table: ColumnTable, column: string): Float64Array {
-  const weights = plainNumbers(table, column, "the weights");
-  const bad = weights.findIndex((weight) => !(weight > 0));
+function positive(weights: Float64Array, column: string, isRead: (row: number) => boolean): Float64Array {
+  const bad = weights.findIndex((weight, row) => !(weight > 0) && isRead(row));
   if (bad >= 0)
     throw optionWrong("weight", `${column}, row ${bad + 1}: ${weights[bad]}`, "a column of positive numbers");
   return weights;

@@ -1,6 +1,14 @@
 import { ModelError } from "../numeric/index.js";
 
-const quote = (names: readonly string[]): string => names.map((name) => `"${name}"`).join(", ");
+const quote = (names: readonly string[]): string => names.map((name) => `"${visible(name)}"`).join(", ");
+
+/** A name with its invisible characters written out: "catch\u200brate". */
+function visible(name: string): string {
+  return name.replace(
+    /[\p{Cc}\p{Cf}\u00a0]/gu,
+    (sign) => `\\u${sign.codePointAt(0)!.toString(16).padStart(4, "0")}`,
+  );
+}
 
 /** At most twelve names, then how many more. */
 export function listed(names: readonly string[]): string {
@@ -21,7 +29,8 @@ export function missingColumn(
   names: readonly string[],
   nearest: readonly string[],
 ): ModelError {
-  const hint = nearest.length > 0 ? ` Did you mean ${nearest.map((n) => `"${n}"`).join(" or ")}?` : "";
+  const hint =
+    nearest.length > 0 ? ` Did you mean ${nearest.map((n) => `"${visible(n)}"`).join(" or ")}?` : "";
   return new ModelError(
     "missing-column",
     `The record has no column "${name}", asked for as ${askedFor}. Its columns are ${listed(names)}.${hint}`,
@@ -113,5 +122,51 @@ export function notObservations(given: string): ModelError {
     `Differences are taken of observations; this is ${given}. Make them first: ` +
       'observations(record, { period: "week", step: "week", value: "stock" }).',
     { given },
+  );
+}
+
+export function noRowsChosen(
+  where: Readonly<Record<string, unknown>>,
+  range: object,
+  cellsOf: (name: string) => readonly string[],
+): ModelError {
+  const held = Object.keys(where).map((name) => `"${name}" holds ${listed(cellsOf(name))}`);
+  const asked = `where: ${JSON.stringify(where)}${Object.keys(range).length === 0 ? "" : `, rows: ${JSON.stringify(range)}`}`;
+  return new ModelError(
+    "no-rows-chosen",
+    `No row of the record meets ${asked}.${held.length === 0 ? "" : ` ${held.join("; ")}.`}`,
+    { where, range },
+  );
+}
+
+export function conditionWrong(column: string, condition: unknown, ends: string): ModelError {
+  return new ModelError(
+    "option-wrong",
+    `Option \`where\`: ${JSON.stringify(condition)} is no condition on "${column}". Write a cell, several cells in [ ], ` +
+      `{ not: ... }, or { from: ..., until: ... } with ${ends}.`,
+    { column, condition },
+  );
+}
+
+export function columnNotUsed(
+  option: string,
+  name: string,
+  known: readonly string[],
+  nearest: readonly string[],
+): ModelError {
+  const hint = nearest.length > 0 ? ` Did you mean ${nearest.map((n) => `"${n}"`).join(" or ")}?` : "";
+  return new ModelError(
+    "option-wrong",
+    `Option \`${option}\`: "${name}" is neither a value nor an input of these observations. They have ${listed(known)}.${hint}`,
+    { option, name, known, nearest },
+  );
+}
+
+export function levelsAddedUp(column: string): ModelError {
+  return new ModelError(
+    "option-wrong",
+    `Option \`duplicates\`: "sum" would add up "${column}", which is measured as a level. Write duplicates: "last" (or "first", "average"): ` +
+      "columns measured as flows are added up all the same.",
+    { column },
   );
 }

@@ -1,5 +1,6 @@
 export type { NamedClosedForm, NamedEquilibrium, NamedQuantity, NamedRule } from "./catalogue/named-rule.js";
 export { type RuleCatalogue, rules } from "./catalogue/rules.js";
+export { shortNames } from "./catalogue/short-names.js";
 export { compileRule, interpretRule } from "./code/compile-rule.js";
 export type { CompiledRule, PathSums, StepSums } from "./compiled-rule.js";
 export { encloseStep, type FixedValues, type StepEnclosure } from "./enclose-step.js";
@@ -15,10 +16,12 @@ export { linearInParameters } from "./linear-in-parameters.js";
 export { type NonsmoothCall, type NonsmoothCalls, nonsmoothCalls } from "./nonsmooth-calls.js";
 export { quantitiesAt } from "./quantities-at.js";
 export { recurrence } from "./recurrence.js";
-export type { RecurrenceOptions } from "./recurrence-options.js";
+export type { Bounds, RecurrenceOptions } from "./recurrence-options.js";
 export type { ProcessNoise, Rule } from "./rule.js";
+export { ruleLabel, ruleLines } from "./rule-label.js";
 export { type RuleLanguage, ruleLanguage } from "./rule-language.js";
 export { ruleText } from "./rule-text.js";
+export { type AtBound, type StateBound, stateBounds, withinBound } from "./state-bounds.js";
 export {
   intervalAlgebra,
   isLinearInStates,
@@ -27,3 +30,4 @@ export {
   stepOver,
 } from "./step-over.js";
 export { ruleTex } from "./tex/rule-tex.js";
+export { unitClash } from "./units/unit-clash.js";

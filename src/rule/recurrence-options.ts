@@ -1,15 +1,27 @@
 import type { ProcessNoise } from "./rule.js";
+import type { AtBound } from "./state-bounds.js";
+
+/** Lowest and highest value; for a state also what becomes of it there. */
+export type Bounds =
+  | readonly [number, number]
+  | { readonly range: readonly [number, number]; readonly atBounds: AtBound };
 
 /** Options of a rule. */
 export interface RecurrenceOptions {
+  /** Name of the rule in titles, tables and sentences; default: its text, or its name in the catalogue. */
+  readonly name?: string;
   /** All parameters; any other free name is then an error. Default: every free name is a parameter. */
   readonly parameters?: readonly string[];
   /** Names that are recorded by period, as columns of the record. Only inputs can be read at [t+1]. */
   readonly inputs?: readonly string[];
   /** Unit by name, such as { N: "cells/mL", r: "1/hour" }. */
   readonly units?: Readonly<Record<string, string>>;
-  /** Lower and upper bound by state or parameter, as in { K: [0, Infinity] }. */
-  readonly bounds?: Readonly<Record<string, readonly [number, number]>>;
+  /**
+   * Lower and upper bound by state or parameter, as in { K: [0, Infinity] }. For a state also what happens there:
+   * { N: { range: [0, 500], atBounds: "error" } }. Default: a state is absorbed at a lower bound of 0 (it stays 0); any
+   * other bound is an error of the rule, at which a path ends.
+   */
+  readonly bounds?: Readonly<Record<string, Bounds>>;
   /** Starting value of a fit, by parameter. */
   readonly start?: Readonly<Record<string, number>>;
   /** Parameters held at a value in every fit. */

@@ -54,15 +54,15 @@ export async function readTable(path: string, options: ReadOptions = {}): Promis
     named === format ? [] : [`The file is read as ${format}: its contents do not match its extension.`];
   const rows = read.columns[0]?.length ?? 0;
   if (rows === 0) throw noDataRowsError(path);
-  const source = Object.freeze({
+  const source = {
     path,
     format,
     checksum: checksum.checksum,
     bytes: checksum.bytes,
     rows,
-    found: Object.freeze([...found, ...read.found]),
-  });
-  return Object.freeze({ names: read.names, columns: read.columns, source });
+    found: [...found, ...read.found],
+  };
+  return { names: read.names, columns: read.columns, source };
 }
 
 function isText(format: Format): boolean {

@@ -5,7 +5,7 @@ const inward = [
   ["numeric", []],
   ["record", ["numeric"]],
   ["rule", ["numeric"]],
-  ["dynamics", ["numeric", "rule"]],
+  ["dynamics", ["numeric", "record", "rule"]],
   ["estimate", ["numeric", "record", "rule", "dynamics"]],
   ["projection", ["numeric", "record", "rule", "dynamics", "estimate"]],
   ["evidence", ["numeric", "record", "rule", "dynamics", "estimate", "projection"]],

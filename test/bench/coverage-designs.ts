@@ -2,6 +2,7 @@ import type { FitOptions } from "../../src/estimate/index.js";
 import type { RandomStream } from "../../src/numeric/index.js";
 import type { Observations, ObservedGroup } from "../../src/record/index.js";
 import { compileRule, type Rule, recurrence } from "../../src/rule/index.js";
+import { numbered } from "../estimate/record.js";
 
 /** A way in which records come about, and how they are fitted. */
 export interface Design {
@@ -195,6 +196,7 @@ function recordOf(
 ): Observations {
   const group: ObservedGroup = {
     name: "",
+    axis: numbered(kept[0]!.t),
     index: Int32Array.from(kept, ({ t }) => t),
     time: Float64Array.from(kept, ({ t }) => t),
     values: { [name]: Float64Array.from(kept, ({ value }) => value) },
@@ -209,10 +211,9 @@ function recordOf(
   return {
     kind: "observations",
     groups: [group],
-    states: [{ name, column: name, unit: "" }],
+    states: [{ name, column: name, unit: "", measured: "level" }],
+    axis: group.axis,
     inputs: [],
-    period: { column: "t", unit: "", step: { every: 1, of: "period" } },
-    measured: "level",
     order: "",
     findings: [],
     counts,

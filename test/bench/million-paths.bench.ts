@@ -11,7 +11,7 @@ const asked = {
   periods: 100,
   noise: { N: { distribution: "lognormal", sd: 0.2, centre: "mean" } },
   paths: Number(process.env["PERIODWISE_BENCH_PATHS"] ?? 1_000_000),
-  watch: [{ value: 60, direction: "falling" }],
+  watch: [{ fallsTo: 60 }],
 } as const;
 
 const before = process.memoryUsage().arrayBuffers;

@@ -34,12 +34,24 @@ fit(rule, counts, { errors: "neither" });
 // @ts-expect-error
 fit(rule, counts, { errors: "process", distributon: "normal" });
 
-const rivals = compare([fitted, fitted]);
+const growth: number = fitted.values.R;
+const [least, most]: readonly [number, number] = fitted.interval("R");
+const first: number = fitted.group("A").values["N[0]"];
+// @ts-expect-error
+const estimatesAreNumbers: string = fitted.values.R;
+const density: number = counts.last("density");
+
+const rivals = compare([fitted, fitted], { decide: (rival) => `${rival.values.R}` });
 // @ts-expect-error
 const comparisonIsNoNumber: number = rivals;
 
 const ahead = forecast(fitted, { periods: 12 });
-const ready = timeToReach(ahead, { state: "N", value: 60, direction: "rising" });
+const ready = timeToReach(ahead, { state: "N", risesTo: 60 });
+const levels: readonly number[] = ahead.values.N;
+const end: number = ahead.last("N") + ahead.fit.values.R;
+const when: number | undefined = ready.firstPeriod;
+// @ts-expect-error: it may never get there
+const always: number = ready.firstPeriod;
 const sentence: string = ready.sentence;
 // @ts-expect-error
 const sentenceIsNoNumber: number = ready.sentence;
@@ -71,13 +83,22 @@ const namesAreNoText: string = rules.logistic().parameters;
 trajectory(stages, { steps: 3 });
 
 export {
+  always,
   comparisonIsNoNumber,
+  density,
   dominant,
+  end,
   estimate,
   estimatesAreNoText,
+  estimatesAreNumbers,
+  first,
   fitIsNoText,
+  growth,
   kind,
+  least,
+  levels,
   levelsAreNoText,
+  most,
   namesAreNoText,
   parameters,
   parametersAreNoNumber,
@@ -85,4 +106,5 @@ export {
   sentenceIsNoNumber,
   table,
   verdict,
+  when,
 };

@@ -36,11 +36,11 @@ test("each scenario clears the loan in the month that the ledger in cents does",
       ...now,
       scenarios: {
         "as agreed": { rate: 0.048, payment: 1480 },
-        step: { rate: { usual: 0.048, from: { 13: 0.058 } }, payment: 1480 },
-        missed: { rate: 0.048, payment: { usual: 1480, at: { 3: 0, 4: 0, 5: 0 } } },
+        step: { rate: { usual: 0.048, from: { 41: 0.058 } }, payment: 1480 },
+        missed: { rate: 0.048, payment: { usual: 1480, at: { 31: 0, 32: 0, 33: 0 } } },
       },
     }),
-    { state: "owed", value: 0, direction: "falling" },
+    { state: "owed", fallsTo: 0 },
   );
   const missed = new Set([3, 4, 5]);
   const months = [
@@ -67,7 +67,7 @@ test("the payment that clears it by month 120 is the smallest in whole cents tha
     vary: "payment",
     range: [700, 5000],
     multiple: 0.01,
-    until: { time: "owed", value: 0, direction: "falling", atMost: 120 },
+    until: { time: "owed", fallsTo: 0, atMost: 120 },
   });
   const cents = BigInt(Math.round(found.solutions[0]!.value * 100));
   expect(

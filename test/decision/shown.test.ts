@@ -23,7 +23,7 @@ const given = {
   paths: 400,
   period: "week",
 } as const;
-const out = { risk: "stock", value: 0, direction: "falling" } as const;
+const out = { probability: "stock", fallsTo: 0 } as const;
 const flasks = observations(
   {
     flask: [..."AAAAAAABBBBBBB"],
@@ -39,11 +39,10 @@ const shown = async (value: unknown): Promise<string> => `${(await bundleOf(valu
 describe("what is shown of a decision has its numbers and its sentence", () => {
   test("reaches: every group, and the sentence", async () => {
     const found = timeToReach(forecast(grown, { periods: 8, paths: 200 }), {
-      value: 120,
-      direction: "rising",
+      risesTo: 120,
     });
     const text = await shown(found);
-    expect(text).toContain("When N reaches 120 ×10⁴ cells/mL by N[t+1] = R*N");
+    expect(text).toContain("When N reaches 120 ×10⁴ cells/mL by the rule N[t+1] = R*N");
     expect(text).toContain(found.sentence.slice(0, 60));
     expect(text).toMatch(/\bA\b[\s\S]*\bB\b/);
   });
@@ -96,6 +95,6 @@ describe("what is shown of a decision has its numbers and its sentence", () => {
     });
     const text = await shown(found);
     expect(text).toContain("Monte-Carlo error");
-    expect(text).toContain("runs out: the risk that stock falls to 0 coils.");
+    expect(text).toContain("runs out: the probability that stock falls to 0 coils.");
   });
 });

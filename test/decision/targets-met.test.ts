@@ -13,8 +13,7 @@ const ask = (until: SolveOptions["until"], more: Partial<SolveOptions> = {}) =>
   solveFor(store, {
     initial: { stock: 488 },
     periods: 10,
-    noise: { stock: { distribution: "normal", sd: 0.5 } },
-    paths: 400,
+    ...("probability" in until && { noise: { stock: { distribution: "normal", sd: 0.5 } }, paths: 400 }),
     vary: "issued",
     range: [5, 10],
     until,
@@ -24,11 +23,11 @@ const ask = (until: SolveOptions["until"], more: Partial<SolveOptions> = {}) =>
 // Source of all expected values: stock after n periods is 488 - n issued, by subtraction.
 describe("a target that every setting meets", () => {
   test("is said to be met everywhere, with the risk", () => {
-    const found = ask({ risk: "stock", value: 100, direction: "falling", atMost: 0.05 });
+    const found = ask({ probability: "stock", fallsTo: 100, atMost: 0.05 });
     expect(found.solutions).toEqual([]);
     expect(found.everywhere).toEqual([0, 0]);
     expect(found.sentence).toBe(
-      "Every issued looked at from 5 to 10 t meets the target: the risk that stock falls to 100 t is 0% throughout (simulated), provided issued goes as planned and the rule stock[t+1] = stock - issued holds.",
+      "Every issued looked at from 5 to 10 t meets the target: the probability that stock falls to 100 t is 0% throughout (simulated), provided issued goes as planned and the rule stock[t+1] = stock - issued holds.",
     );
   });
 
@@ -39,21 +38,21 @@ describe("a target that every setting meets", () => {
   });
 
   test("and one that none meets has its risk said", () => {
-    expect(ask({ risk: "stock", value: 480, direction: "falling", atMost: 0.05 }).sentence).toBe(
-      "No issued looked at from 5 to 10 t brings the risk that stock falls to 480 t to the target: it is 100% throughout (simulated).",
+    expect(ask({ probability: "stock", fallsTo: 480, atMost: 0.05 }).sentence).toBe(
+      "No issued looked at from 5 to 10 t brings the probability that stock falls to 480 t to the target: it is 100% throughout (simulated).",
     );
   });
 });
 
 test("what is past at the start already is said", () => {
   const past = "stock begins at 488 t, already at or below 600 t";
-  expect(() => ask({ time: "stock", value: 600, direction: "falling", atLeast: 5 })).toThrow(past);
-  expect(() => ask({ risk: "stock", value: 600, direction: "falling", atMost: 0.05 })).toThrow(past);
+  expect(() => ask({ time: "stock", fallsTo: 600, atLeast: 5 })).toThrow(past);
+  expect(() => ask({ probability: "stock", fallsTo: 600, atMost: 0.05 })).toThrow(past);
 });
 
 test("a risk in percent is refused with the share to write", () => {
-  expect(() => ask({ risk: "stock", value: 0, direction: "falling", atMost: 5 })).toThrow(
-    "A risk is from 0 to 1: write 0.05 for 5%.",
+  expect(() => ask({ probability: "stock", fallsTo: 0, atMost: 5 })).toThrow(
+    "A probability is from 0 to 1: write 0.05 for 5%.",
   );
 });
 
@@ -69,7 +68,7 @@ test("a limit is rounded to the side that meets the target", () => {
 });
 
 test("a time that is not to come too soon is said by its limit", () => {
-  const until = { time: "stock", value: 244, direction: "falling", atLeast: 8 } as const;
+  const until = { time: "stock", fallsTo: 244, atLeast: 8 } as const;
   expect(ask(until, { range: [5, 60] }).sentence).toContain("stock falls to 244 t not before period 8,");
 });
 
@@ -88,8 +87,8 @@ test("an answer read from below zero, where no record was, says so", () => {
   const scenarios = { usual: { landed: 17 }, high: { landed: 100 } };
   const ahead = forecast(fitted, { periods: 6, scenarios, paths: 200 });
   const warning = /By year 15 the rule gives index = -\d+(\.\d)? under "high"/;
-  expect(timeToReach(ahead, { value: 500, direction: "rising" }).sentence).toMatch(warning);
-  expect(timeToReach(ahead, { value: 300, direction: "falling" }).sentence).not.toMatch(warning);
+  expect(timeToReach(ahead, { risesTo: 500 }).sentence).toMatch(warning);
+  expect(timeToReach(ahead, { fallsTo: 300 }).sentence).not.toMatch(warning);
   const compared = tradeoff(fitted, {
     vary: "landed",
     values: [17, 100],
@@ -104,7 +103,7 @@ test("an answer read from below zero, where no record was, says so", () => {
     periods: 6,
     until: { level: "index", at: 6, is: -50 },
   });
-  expect(solved.sentence).toContain("By year 15 the rule gives index = -50 under");
+  expect(solved.sentence).toContain("By year 15 the rule gives index = -50.");
   const kept = solveFor(fitted, {
     vary: "landed",
     range: [10, 200],

@@ -79,3 +79,25 @@ test("a path whose digits grow without end is refused, not run", () => {
     expect.objectContaining({ code: "too-many-digits" }),
   );
 });
+
+// Source: Python 3.11, // and % of fractions (floor division): the remainder has the sign of the divisor.
+test.each([
+  ["mod(x, 3)", "-7", "2"],
+  ["mod(x, 3)", "7", "1"],
+  ["mod(x, -3)", "7", "-2"],
+  ["mod(x, -3)", "-7", "-1"],
+  ["mod(x, 3)", "-6", "0"],
+  ["mod(x, 1/2)", "-2/3", "1/3"],
+  ["floor(x)", "-7/2", "-4"],
+  ["floor(x)", "7/2", "3"],
+  ["ceil(x)", "-7/2", "-3"],
+  ["ceil(x)", "7/2", "4"],
+  ["round(x, 0)", "-7/2", "-4"],
+  ["round(x, 0)", "5/2", "3"],
+  ["round(x, 1)", "-1/3", "-3/10"],
+  ["abs(x)", "-7/2", "7/2"],
+  ["sign(x)", "-7/2", "-1"],
+])("%s of %s is exactly %s", (text, x, value) => {
+  const { values } = exactTrajectory(recurrence(`x[t+1] = ${text}`), { initial: { x }, periods: 1 });
+  expect(values["x"]![1]).toBe(value);
+});

@@ -1,4 +1,4 @@
-import type { Observations, ObservedGroup } from "../../src/record/index.js";
+import type { Observations, ObservedGroup, PeriodAxis } from "../../src/record/index.js";
 
 /** Columns of one series, by name; `t` holds the periods, 0, 1, ... when absent. */
 export type Columns = Readonly<Record<string, readonly number[]>>;
@@ -16,10 +16,14 @@ export function record(
   return {
     kind: "observations",
     groups,
-    states: Object.keys(groups[0]!.values).map((name) => ({ name, column: name, unit: "" })),
+    states: Object.keys(groups[0]!.values).map((name) => ({
+      name,
+      column: name,
+      unit: "",
+      measured: "level",
+    })),
+    axis: groups[0]!.axis,
     inputs: inputNames,
-    period: { column: "t", unit: "week", step: { every: 1, of: "week" } },
-    measured: "level",
     order: "",
     findings: [],
     counts: { read, used: read, flagged: 0, corrected: 0, refused: 0 },
@@ -42,11 +46,27 @@ function groupOf(
     );
   return {
     name,
+    axis: numbered(time[0]!),
     index: Int32Array.from(time, (at) => at - time[0]!),
     time,
     values: pick((column) => !inputNames.includes(column)),
     inputs: pick((column) => inputNames.includes(column)),
     rows: Int32Array.from({ length: count }, (_, row) => row + 1),
     ...fields,
+  };
+}
+
+/** Weeks by number, from a first one on. */
+export function numbered(origin: number): PeriodAxis {
+  const step = { every: 1, of: "week" };
+  return {
+    kind: "period-axis",
+    column: "t",
+    unit: "week",
+    step,
+    form: "number",
+    counts: "numbers",
+    origin,
+    stride: 1,
   };
 }

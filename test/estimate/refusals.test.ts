@@ -84,7 +84,7 @@ test("an input that is missing in a period", () => {
     { inputNames: ["catch"] },
   );
   expect(said(rule, holes, trajectory)).toMatchInlineSnapshot(
-    `"The input "catch" is not recorded in period 3, which a step of the rule reads. Record it (0 where nothing happened), or fit the part of the record that has it."`,
+    `"The input "catch" is not recorded at week 3, which a step of the rule reads. Record it (0 where nothing happened), or fit the part of the record that has it."`,
   );
   expect(said(rule, grown, trajectory)).toMatchInlineSnapshot(
     `"The rule reads the input "catch", which the record does not hold. Name it in observations(..., { inputs })."`,

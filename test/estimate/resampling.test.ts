@@ -33,11 +33,15 @@ describe("bootstrap", () => {
   });
 
   test("refuses what it cannot resample, and too few draws", () => {
-    const counts = fit(recurrence("D[t+1] = D"), record({ D: [3, 5, 4, 6, 2] }), {
-      errors: "observation",
-      distribution: "poisson",
-    });
-    expect(() => bootstrap(counts)).toThrow(expect.objectContaining({ code: "not-by-least-squares" }));
+    const level = recurrence("D[t+1] = D");
+    const poisson = { errors: "observation", distribution: "poisson" } as const;
+    const D = [3, 5, 4, 6, 2];
+    const counts = fit(level, record({ D }), poisson);
+    expect(() => bootstrap(counts, { errors: "residual" })).toThrow(
+      expect.objectContaining({ code: "no-residuals" }),
+    );
+    const weighted = fit(level, record({ D }, { weights: Float64Array.of(1, 1, 2, 1, 1) }), poisson);
+    expect(() => bootstrap(weighted)).toThrow(expect.objectContaining({ code: "not-simulated" }));
     expect(() => bootstrap(fitted, { resamples: 5 })).toThrow(
       expect.objectContaining({ code: "too-few-draws" }),
     );
@@ -48,6 +52,19 @@ const holds = (
   { lower = -9, upper = 9 }: { lower?: number | undefined; upper?: number | undefined },
   truth: number,
 ): boolean => lower <= truth && truth <= upper;
+
+// Source: the mean of n Poisson counts of mean m has the standard deviation sqrt(m/n).
+test("counts are drawn from their distribution", () => {
+  const D = [3, 5, 4, 6, 2, 7, 4, 1, 5, 3];
+  const counts = fit(recurrence("D[t+1] = D"), record({ D }), {
+    errors: "observation",
+    distribution: "poisson",
+  });
+  const [row] = bootstrap(counts, { resamples: 800 }).rows;
+  expect(row!.estimate).toBeCloseTo(4, 6);
+  // A standard error from 800 refits is known to 1/sqrt(1600) = 2.5%.
+  expect(Math.abs(row!.standardError / Math.sqrt(4 / 10) - 1)).toBeLessThan(0.1);
+});
 
 describe("gridInterval", () => {
   test("keeps its coverage near a unit root, where the profile loses it", () => {

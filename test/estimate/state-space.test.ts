@@ -35,7 +35,7 @@ describe("errors in both the process and the observation", () => {
     expect(fitted.groups[0]!.filter!.start).toBe("stationary");
     expect(
       Math.abs(
-        fitted.groups[0]!.criteria.logLikelihood -
+        fitted.groups[0]!.criteria!.logLikelihood -
           jointNormal(
             x.map((v) => v - c / (1 - b)),
             covariance,

@@ -76,7 +76,7 @@ describe("compare", () => {
     expect(compared.notes.join(" ")).toContain("brought back by -sum ln(y)");
     const logs = fits[0]!.groups[0]!.points.reduce((sum, point) => sum + Math.log(point.observed), 0);
     const own = compared.rows.map((row) => row.logLikelihood);
-    expect(own).toContain(fits[0]!.groups[0]!.criteria.logLikelihood - logs);
+    expect(own).toContain(fits[0]!.groups[0]!.criteria!.logLikelihood - logs);
   });
 
   test("two rivals within 2 units of AICc with different decisions are both printed, and none is called best", () => {

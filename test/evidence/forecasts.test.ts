@@ -14,7 +14,7 @@ test("predictive sd includes parameter uncertainty and process error of every st
   for (let t = 1; t <= 24; t++) logs.push(logs[t - 1]! + 0.03 + (t % 2 === 0 ? away : -away));
   const record = series(logs.map(Math.exp));
   const fitted = fit(recurrence("N[t+1] = R*N"), record, { errors: "process", distribution: "lognormal" });
-  const ahead = predictAhead(fitted, fitted.groups[0]!, record.groups[0]!, 12)!;
+  const ahead = predictAhead(fitted, fitted.groups[0]!, record.groups[0]!, 24, 12)!;
   for (const [h, expected] of [
     [1, 0.061237],
     [6, 0.164317],
@@ -30,7 +30,7 @@ test("errors of steps are carried along a rule that bends", () => {
   const record = series(drawn(rule, [0.6, 100], 10, 200, 0.05, "process", randomStream(4)));
   const fitted = fit(rule, record, { errors: "process", distribution: "lognormal" });
   const [group] = fitted.groups;
-  const ahead = predictAhead(fitted, group!, record.groups[0]!, 4)!;
+  const ahead = predictAhead(fitted, group!, record.groups[0]!, record.groups[0]!.index.length - 1, 4)!;
   const { step } = compileRule(rule);
   const parameters = Float64Array.from(rule.parameters, (name) => group!.parameters[name]!);
   const stream = randomStream(9);

@@ -46,7 +46,7 @@ describe("propose", () => {
     expect(proposal.verdict.rules).toContain("bevertonHolt");
     const row = proposal.rows.find((each) => each.name === "thetaLogistic")!;
     expect(row).toMatchObject({ supported: true, undetermined: ["theta"] });
-    expect(proposal.sentence).toContain("It does not determine theta of thetaLogistic.");
+    expect(proposal.sentence).toContain("It does not determine theta of the rule theta-logistic.");
     expect(proposal.fits).toHaveLength(proposal.rows.filter((each) => each.supported).length);
     expect(proposal.fits[0]!.groups[0]!.estimates[0]!.profile.lower).toBeDefined();
   });

@@ -33,16 +33,25 @@ async function make(): Promise<Readonly<Record<string, unknown>>> {
     { hour: [...yeast.keys()], density: [...yeast] },
     { period: "hour", step: { every: 1, of: "hour" }, value: "density" },
   );
+  const flasks = observations(
+    {
+      hour: [...yeast.keys(), ...yeast.keys()],
+      density: [...yeast, ...yeast.map((value, i) => value * (i % 2 === 0 ? 1.02 : 0.99))],
+      flask: [...yeast.map(() => "A"), ...yeast.map(() => "B")],
+    },
+    { period: "hour", step: { every: 1, of: "hour" }, by: "flask", value: "density" },
+  );
   const crowding = recurrence("ΔN = r*N*(1 - N/K)");
   const sheltered = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)");
   const crowdingFit = fit(crowding, counts, { errors: "observation" });
   const shelteredFit = fit(sheltered, counts, { errors: "observation" });
   const fitted = shelteredFit;
   const ahead = forecast(fitted, { periods: 12 });
-  const ready = timeToReach(ahead, { value: 600, direction: "rising" });
+  const ready = timeToReach(ahead, { risesTo: 600 });
   return {
     readings,
     counts,
+    flasks,
     crowding,
     sheltered,
     rule: sheltered,

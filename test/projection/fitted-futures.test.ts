@@ -67,7 +67,7 @@ describe("a rule with an input", () => {
       "The rule needs rain for the next 4 periods; supply a scenario, such as inputs: { rain: { usual: 0 } }.",
     );
     expect(() => forecast(fitted, { periods: 4, inputs: { rain: [1, 2] } })).toThrow(
-      "The plan of rain has 2 values and the projection needs 4. Give one for each period, or { usual, from, at }.",
+      "Invalid plan for `rain`: it has 2 values and the projection needs 4. Give one for each period, or { usual, from, at }.",
     );
   });
 
@@ -75,7 +75,7 @@ describe("a rule with an input", () => {
     const ahead = forecast(fitted, {
       periods: 4,
       paths: 200,
-      scenarios: { usual: { rain: 4 }, "a dry third week": { rain: { usual: 4, at: { 3: 0 } } } },
+      scenarios: { usual: { rain: 4 }, "a dry third week": { rain: { usual: 4, at: { 14: 0 } } } },
     });
     const [usual, dry] = ahead.groups;
     const { keep, gain } = fitted.groups[0]!.parameters as { keep: number; gain: number };

@@ -77,7 +77,7 @@ test("a walk in unit normal steps passes a level by n with the exact probability
     periods: 1,
     noise: { x: { distribution: "normal", sd: 1 } },
     paths,
-    watch: [{ value: 0, direction: "falling" }],
+    watch: [{ fallsTo: 0 }],
   });
   const passed = found.groups[0]!.passages[0]!.at.filter(Number.isFinite).length / paths;
   const exact = 1 - normalCdf(1);
@@ -149,13 +149,21 @@ test("schedules and one-off events reach the periods they name, and scenarios sh
     expect(missed![path * 7 + 3]! - usual![path * 7 + 3]!).toBeCloseTo(100, 9);
 });
 
-test("a path that leaves the range of a state stops, and it is said at which period", () => {
-  // Common practice, no source: the message names the value, its period and where the projection stopped.
-  const rule = recurrence("B[t+1] = B - C", { bounds: { B: [0, Infinity] } });
-  const found = simulate(rule, { parameters: { C: 30 }, initial: { B: 100 }, periods: 6 });
+test("a path that passes a bound stays there, or stops where that is an error; both are said with the period", () => {
+  // Source: 100 less 30 a period, by subtraction.
+  const run = { parameters: { C: 30 }, initial: { B: 100 }, periods: 6 };
+  const gone = simulate(recurrence("B[t+1] = B - C", { bounds: { B: [0, Infinity] } }), run);
+  expect(gone.groups[0]!.states[0]!.central).toEqual([100, 70, 40, 10, 0, 0, 0]);
+  expect(gone.groups[0]!.warnings.map((w) => w.message)).toEqual([
+    "B reaches its bound 0 at period 4 and stays there.",
+  ]);
+  const rule = recurrence("B[t+1] = B - C", {
+    bounds: { B: { range: [0, Infinity], atBounds: "error" } },
+  });
+  const found = simulate(rule, run);
   expect(found.groups[0]!.states[0]!.central).toEqual([100, 70, 40, 10, Number.NaN, Number.NaN, Number.NaN]);
   expect(found.groups[0]!.warnings.map((w) => w.message)).toEqual([
-    "Period 4: the rule gives B = -20; the path without random change stops at period 3.",
+    "At period 4 the rule gives B = -20, outside its range; the path without random change stops at period 3.",
   ]);
 });
 
@@ -191,10 +199,10 @@ test("what cannot be run is refused in a whole sentence", () => {
     'The rule has no input "paymant". It has: payment. Did you mean "payment"?',
   );
   expect(run({ inputs: { payment: [1, 2] } })).toThrow(
-    "The plan of payment has 2 values and the projection needs 4. Give one for each period, or { usual, from, at }.",
+    "Invalid plan for `payment`: it has 2 values and the projection needs 4. Give one for each period, or { usual, from, at }.",
   );
   expect(run({ inputs: { payment: { usual: 1, at: { 9: 0 } } } })).toThrow(
-    "The plan of payment cannot be followed: period 9 lies outside periods 0 to 3.",
+    "Invalid plan for `payment`: `at` speaks of 9, and the projection runs from 0 to 3: 9 lies outside it.",
   );
   expect(run({ periods: 0 })).toThrow(
     "A projection runs over a whole number of periods, at least 1; 0 was given.",

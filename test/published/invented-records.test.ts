@@ -36,11 +36,11 @@ describe("a culture recorded every half hour", () => {
     near((2 * named(fitted, "R").standardError!) / named(fitted, "R").value, 0.006127, 1e-3);
     near(group!.sigma, 0.0339, 2e-4);
     near(group!.sumOfSquares, 0.0206803, 5e-6);
-    expect(Math.abs(group!.criteria.aicCorrected - -75.29)).toBeLessThan(1e-3);
+    expect(Math.abs(group!.criteria!.aicCorrected - -75.29)).toBeLessThan(1e-3);
     const exponential = fit(recurrence("N[t+1] = R*N"), until(99), trajectory);
-    expect(Math.abs(exponential.groups[0]!.criteria.aicCorrected - -5.431)).toBeLessThan(1e-3);
+    expect(Math.abs(exponential.groups[0]!.criteria!.aicCorrected - -5.431)).toBeLessThan(1e-3);
     const gompertz = fit(recurrence("N[t+1] = N^b*K^(1 - b)"), until(99), trajectory);
-    expect(Math.abs(gompertz.groups[0]!.criteria.aicCorrected - -51.908)).toBeLessThan(1e-3);
+    expect(Math.abs(gompertz.groups[0]!.criteria!.aicCorrected - -51.908)).toBeLessThan(1e-3);
   });
 
   test.each([
@@ -79,7 +79,7 @@ describe("a Gompertz state-space record with process and observation error", () 
     near(named(both, "b").value, 0.7246, 1e-4);
     near(named(both, "process error").value, 0.2994, 2e-4);
     near(named(both, "observation error").value, 0.2046, 3e-4);
-    expect(Math.abs(group!.criteria.logLikelihood - -27.891)).toBeLessThan(1e-3);
+    expect(Math.abs(group!.criteria!.logLikelihood - -27.891)).toBeLessThan(1e-3);
     expect(Math.abs(named(both, "b").profile.lower! - 0.409)).toBeLessThan(1e-3);
     expect(Math.abs(named(both, "b").profile.upper! - 0.958)).toBeLessThan(1e-3);
     expect(group!.filter).toMatchObject({ start: "stationary", method: "exact" });

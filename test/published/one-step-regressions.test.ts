@@ -85,8 +85,8 @@ test("lh: exact likelihood of an AR(1) without observation error (R arima)", () 
   near(named(exact, "mean").value, 2.413288, 1e-3);
   near(named(exact, "mean").standardError, 0.1466135, 1e-3);
   near(named(exact, "process error").value ** 2, 0.1974895, 1e-3);
-  expect(Math.abs(exact.groups[0]!.criteria.logLikelihood - -29.379162)).toBeLessThan(1e-4);
-  expect(Math.abs(exact.groups[0]!.criteria.aic - 64.758325)).toBeLessThan(2e-4);
+  expect(Math.abs(exact.groups[0]!.criteria!.logLikelihood - -29.379162)).toBeLessThan(1e-4);
+  expect(Math.abs(exact.groups[0]!.criteria!.aic - 64.758325)).toBeLessThan(2e-4);
 });
 
 test("Nile: local level model, by likelihood and by its MA(1) form (R StructTS and arima)", () => {
@@ -96,7 +96,7 @@ test("Nile: local level model, by likelihood and by its MA(1) form (R StructTS a
   const reading = named(level, "observation error").value ** 2;
   near(step, 1469.146632, 1e-3);
   near(reading, 15098.57709, 1e-3);
-  expect(Math.abs(level.groups[0]!.criteria.logLikelihood - -632.5456244)).toBeLessThan(1e-4);
+  expect(Math.abs(level.groups[0]!.criteria!.logLikelihood - -632.5456244)).toBeLessThan(1e-4);
   // The same as a moving average of the changes: s2 (1 + theta)^2 = step, -theta s2 = reading.
   const [theta, variance] = [-0.7329426, 20599.86681];
   near(step, variance * (1 + theta) ** 2, 1e-3);

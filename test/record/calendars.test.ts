@@ -117,7 +117,7 @@ describe("a calendar", () => {
 
   test("that does not exist is refused with those that do", () => {
     expect(() => indexes({ week: [1] }, { period: "week", step: "fortnight" as never })).toThrow(
-      'The option "step" is "fortnight"; it must be a length such as { every: 12, of: "hour" } or one of half-hour, hour,',
+      'The option "step" is "fortnight"; it must be a length such as { every: 12, of: "hour" } or one of second, minute, half-hour, hour,',
     );
   });
 

@@ -132,7 +132,7 @@ describe("observations", () => {
       refused({ value: ["density"] }),
     ]).toMatchInlineSnapshot(`
       [
-        "There is no option "peroid". There are measured, duplicates, disorder, offStep, value, replicates, weight, order, period, step, values, unit, by, where, censored, inputs, identities. Did you mean "period"?",
+        "There is no option "peroid". There are disorder, offStep, value, replicates, weight, order, period, step, values, unit, by, where, rows, censored, measured, inputs, duplicates, identities. Did you mean "period"?",
         "The option "duplicates" is "mean"; it must be one of refuse, average, sum, first, last.",
         "The option "value" is "["density"]"; it must be a text.",
       ]

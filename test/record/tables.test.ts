@@ -173,6 +173,12 @@ describe("another period", () => {
       Float64Array.from([8, Number.NaN, 4]),
       Float64Array.from([2, 2, 2]),
     ]);
+    // A flow adds up and a level takes its last value, as they are stated for observations.
+    const measured = { sold: "flow", held: "level" } as const;
+    expect(toPeriods(days, { period: "date", step: "day", to: "month", measured })).toEqual(months);
+    expect(() => toPeriods(days, { period: "date", step: "day", to: "month" })).toThrow(
+      'measured: { paid: "flow", owed: "level" }',
+    );
   });
 
   test("of numbers counts in their own unit", () => {

@@ -256,8 +256,11 @@ describe("in every domain", () => {
       "single-row: The record has a single usable row: no change can be seen in it. [kept]",
     ]);
     expect(messages({ week: [1, 3, 5], stock: [5, 6, 7] })).toEqual([
+      'step-at-odds: Every pair of rows spans 2 steps of 1 week, or a multiple of that: the step is probably not the one of the record. If one step is what lies between two rows, write step: { every: 2, of: "week" }. [used as 2-step pairs]',
+    ]);
+    expect(messages({ week: [1, 3, 6], stock: [5, 6, 7] })).toEqual([
       "gap: Row 2: week 3 follows 1; one period is missing. [used as a 2-step pair]",
-      "gap: Row 3: week 5 follows 3; one period is missing. [used as a 2-step pair]",
+      "gap: Row 3: week 6 follows 3; 2 periods are missing. [used as a 3-step pair]",
       "no-single-step: No two rows lie one step (1 week) apart; the closest lie 2 steps (2 weeks) apart. [used as multi-step pairs]",
     ]);
   });
@@ -284,7 +287,7 @@ describe("in every domain", () => {
   });
 
   test("findings of one kind are listed up to a hundred and counted beyond", () => {
-    const week = Array.from({ length: 300 }, (_, i) => 2 * i);
+    const week = Array.from({ length: 300 }, (_, i) => Math.floor(2.5 * i));
     const found = observations(tableOf({ week, stock: week.map((w) => 1000 + w) }), weekly);
     expect(found.findings).toHaveLength(102);
     expect(found.findings.at(-1)!.message).toBe(
@@ -326,8 +329,8 @@ describe("in every domain", () => {
       unit: { H: "thousand" },
     });
     expect(both.states).toEqual([
-      { name: "H", column: "hare", unit: "thousand" },
-      { name: "L", column: "lynx", unit: "" },
+      { name: "H", column: "hare", unit: "thousand", measured: "level" },
+      { name: "L", column: "lynx", unit: "", measured: "level" },
     ]);
     expect(Array.from(both.groups[0]!.values["L"]!)).toEqual([3, 4]);
   });

@@ -1,21 +1,28 @@
 import type { Fit } from "../../estimate/index.js";
-import type { Rule } from "../../rule/index.js";
+import { periodsAfter, periodWords } from "../../record/index.js";
+import { type Rule, ruleLabel } from "../../rule/index.js";
 
 /** The record that an answer stands on: "the record of 58 values to hour 240". */
 function recordWords(fit: Fit): string {
-  const { groups, period } = fit.observations;
+  const { groups, axis } = fit.observations;
   const count = groups.reduce(
     (sum, group) =>
       sum + Object.values(group.values).reduce((n, values) => n + values.filter(Number.isFinite).length, 0),
     0,
   );
-  const last = Math.max(...groups.map((group) => group.time[group.time.length - 1]!));
-  const label = groups.length === 1 ? groups[0]!.labels?.[groups[0]!.labels.length - 1] : undefined;
-  return `the record of ${count} values to ${label ?? `${period.unit} ${Number(last.toPrecision(6))}`}`;
+  const last = groups.map((group) => periodsAfter(axis, group.axis)! + group.index[group.index.length - 1]!);
+  return `the record of ${count} values to ${periodWords(axis, Math.max(...last))}`;
 }
 
 /** Longest rule that is named in a sentence. */
 const longest = 60;
+
+/** " "crowding"", or " N[t+1] = R*N": a rule behind the word, where it is short enough to be read there. */
+function ruleWords(rule: Rule): string {
+  const label = ruleLabel(rule);
+  if (label.length > longest || label.includes(";")) return "";
+  return rule.name === undefined ? ` ${label}` : ` "${label}"`;
+}
 
 /** What must hold for an answer: the record's going on, or the rule; and inputs that go as planned. */
 export function conditionWords(rule: Rule, fit: Fit | undefined): string {
@@ -23,10 +30,10 @@ export function conditionWords(rule: Rule, fit: Fit | undefined): string {
     rule.inputs.length === 0
       ? ""
       : `${rule.inputs.join(" and ")} ${rule.inputs.length === 1 ? "goes" : "go"} as planned and `;
-  const short = rule.text.length <= longest && !rule.text.includes("\n");
+  const named = ruleWords(rule);
   if (fit !== undefined)
-    return `${planned}it goes on as in ${recordWords(fit)}${short ? `, by the rule ${rule.text}` : ""}`;
-  return `${planned}the rule${short ? ` ${rule.text}` : ""}${rule.parameters.length === 0 ? " holds" : " and its parameters hold"}`;
+    return `${planned}it goes on as in ${recordWords(fit)}${named && `, by the rule${named}`}`;
+  return `${planned}the rule${named}${rule.parameters.length === 0 ? " holds" : " and its parameters hold"}`;
 }
 
 /** How a group is named: "flask B", or "N" where there is a single one. */

@@ -43,7 +43,7 @@ export interface ClosedForm {
 type Draft = Omit<ClosedForm, "agreement" | "guaranteed">;
 
 function byState<T>(rule: Rule, of: (slot: number) => T): Readonly<Record<string, T>> {
-  return Object.freeze(Object.fromEntries(rule.states.map((name, slot) => [name, of(slot)])));
+  return Object.fromEntries(rule.states.map((name, slot) => [name, of(slot)]));
 }
 
 function common(held: HeldStep): Pick<Draft, "kind" | "rule" | "parameters"> {
@@ -54,7 +54,7 @@ function common(held: HeldStep): Pick<Draft, "kind" | "rule" | "parameters"> {
 function namedForm(held: HeldStep, initial: Float64Array): Draft | undefined {
   const { rule } = held;
   const inputs = Object.fromEntries(rule.inputs.map((name, i) => [name, held.inputs[i]!]));
-  const given = Object.freeze({ ...namedValues(rule, held.parameters, initial), ...inputs });
+  const given = { ...namedValues(rule, held.parameters, initial), ...inputs };
   const found = rule.named?.closedForms.find(
     ({ when, values }) =>
       rule.states.every((state) => state in values) &&
@@ -84,7 +84,7 @@ function linearForm(held: HeldStep, initial: Float64Array): Draft | undefined {
     method: "linear",
     formulas: byState(rule, (slot) => texts[slot]!),
     tex: byState(rule, (slot) => formula(texts[slot]!).tex),
-    roots: Object.freeze(roots),
+    roots,
     terms: byState(rule, (slot) => terms[slot]!),
     given: {},
   };
@@ -119,7 +119,7 @@ function agreementOf(
       largest = Math.max(largest, Math.abs(value - stepped) / Math.max(Math.abs(stepped), 1e-300));
     }
   }
-  return Object.freeze({ periods: run.periods, largest });
+  return { periods: run.periods, largest };
 }
 
 /**
@@ -139,5 +139,5 @@ export function closedForm(rule: Rule, options: ClosedFormOptions = {}): ClosedF
   const draft = namedForm(held, initial) ?? linearForm(held, initial);
   if (draft === undefined) throw noClosedForm(rule.named?.title ?? "This rule");
   const guaranteed = guaranteedDigits(rule, options);
-  return Object.freeze({ ...draft, agreement: agreementOf(draft, options, guaranteed), guaranteed });
+  return { ...draft, agreement: agreementOf(draft, options, guaranteed), guaranteed };
 }

@@ -2,9 +2,11 @@ import { findRoot } from "../../numeric/index.js";
 import type { Rule } from "../../rule/index.js";
 import { missingValue, strangeName, unreadableOption } from "../refusals.js";
 import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.js";
+import type { Followed } from "./cycle-points.js";
+import { type Exchange, exchangePlace, stableBranch } from "./exchange-place.js";
 import { foldPlace } from "./fold-place.js";
-import { type Followed, followCycle, settleInCycle } from "./follow-cycle.js";
-import { followRestLevel } from "./follow-rest-level.js";
+import { followCycle, settleInCycle } from "./follow-cycle.js";
+import { followEquilibrium } from "./follow-equilibrium.js";
 
 export interface BifurcationsOptions extends HeldSetting {
   /** The parameter that is varied. */
@@ -26,9 +28,10 @@ export interface Bifurcation {
   readonly at: number;
   /**
    * `flip`: a cycle of twice the period takes over; `fold`: it meets an unstable one and both vanish;
-   * `neimark-sacker`: turning motion around it takes over (systems and rules with lags only).
+   * `transcritical`: it meets an unstable one, they exchange stability and both go on; `pitchfork`: it goes on unstable
+   * and two stable ones leave it; `neimark-sacker`: turning motion around it takes over (systems and rules with lags).
    */
-  readonly kind: "flip" | "fold" | "neimark-sacker";
+  readonly kind: "flip" | "fold" | "transcritical" | "pitchfork" | "neimark-sacker";
   /** Period of the cycle that is left. */
   readonly period: number;
   /** Its values there; of a system the value of each state in order. */
@@ -48,6 +51,14 @@ interface Walk {
   readonly held: HeldStep;
   readonly slot: number;
   readonly to: number;
+  /** Typical size of the state. */
+  readonly scale: number;
+}
+
+/** A place, and where two branches cross what is known of them. */
+interface Found {
+  readonly place: Bifurcation;
+  readonly exchange?: Exchange;
 }
 
 interface Here {
@@ -71,56 +82,69 @@ function flipBetween(walk: Walk, before: Here, after: Here): Bifurcation {
   return { at, kind: "flip", period: points.length, points };
 }
 
-type March = { readonly here: Here } | { readonly place: Bifurcation } | { readonly lost: true };
+type March = { readonly here: Here } | Found | { readonly lost: true };
 
-/** Goes on along a cycle by one step; a step in which the cycle is lost is halved until a fold can be told. */
+const shortestStep = (at: number): number => 1e-9 * Math.max(Math.abs(at), 1e-3);
+
+/** Goes on along a cycle by one step; a step in which the cycle is lost is halved until it is known why. */
 function march(walk: Walk, here: Here, step: number): March {
-  for (let size = step; Math.abs(size) > 1e-9 * Math.max(Math.abs(here.at), 1e-3); size /= 2) {
+  for (let size = step; Math.abs(size) > shortestStep(here.at); size /= 2) {
     const cycle = cycleAt(walk, here.at + size, here.cycle.points);
     if (cycle === undefined || cycle.slope >= 1) continue;
     const next = { at: here.at + size, cycle };
     if (cycle.slope <= -1) return { place: flipBetween(walk, here, next) };
     return { here: next };
   }
-  const fold = foldPlace(walk.held, walk.slot, { points: here.cycle.points, at: here.at });
+  const last = { points: here.cycle.points, at: here.at };
+  const exchange = exchangePlace(walk.held, walk.slot, last, walk.scale);
+  if (exchange !== undefined) {
+    const { at, kind, points } = exchange;
+    return { place: { at, kind, period: points.length, points }, exchange };
+  }
+  const fold = foldPlace(walk.held, walk.slot, last);
   if (fold === undefined) return { lost: true };
   return { place: { at: fold.at, kind: "fold", period: fold.points.length, points: fold.points } };
 }
 
 /** The stable cycle a little past a place, on which the walk goes on. */
-function beyond(walk: Walk, place: Bifurcation, gap: number): Here | undefined {
+function beyond(walk: Walk, { place, exchange }: Found, gap: number): Here | undefined {
   const at = place.at + gap;
   walk.held.parameters[walk.slot] = at;
-  const cycle = settleInCycle(walk.held, place.points[0]! * (1 + 1e-6) + 1e-12);
+  const cycle =
+    exchange?.kind === "transcritical"
+      ? stableBranch(walk.held, exchange, gap, walk.scale)
+      : settleInCycle(walk.held, place.points[0]! * (1 + 1e-6) + 1e-12);
   if (cycle === undefined || Math.abs(cycle.slope) >= 1) return undefined;
   return { at, cycle };
 }
 
 /** The next place on the way, and steps of a size that the way so far calls for. */
-function nextPlace(walk: Walk, from: Here, step: number): Bifurcation | Bifurcations["stop"] {
+function nextPlace(walk: Walk, from: Here, step: number): Found | Bifurcations["stop"] {
   let here = from;
-  while (Math.sign(walk.to - here.at) === Math.sign(step)) {
+  for (;;) {
     const left = walk.to - here.at;
+    // Steps add up to the end of the range but for rounding.
+    if (left * Math.sign(step) <= shortestStep(walk.to)) return "range";
     const result = march(walk, here, Math.abs(step) > Math.abs(left) ? left : step);
     if ("lost" in result) return "no-cycle";
-    if ("place" in result) return result.place;
+    if ("place" in result) return result;
     here = result.here;
   }
-  return "range";
 }
 
 function follow(walk: Walk, start: Here, limit: number): Pick<Bifurcations, "places" | "stop"> {
   const places: Bifurcation[] = [];
   let step = (walk.to - start.at) / 200;
   for (let here: Here | undefined = start; here !== undefined; ) {
-    const place = nextPlace(walk, here, step);
-    if (typeof place === "string") return { places, stop: place };
+    const found = nextPlace(walk, here, step);
+    if (typeof found === "string") return { places, stop: found };
+    const { place } = found;
     const last = places.at(-1);
     places.push(place);
     if (places.length >= limit) return { places, stop: "limit" };
     // A cascade shrinks by about 4.669 from one doubling to the next, so steps shrink with it.
     if (last !== undefined && place.kind === "flip") step = (place.at - last.at) / 40;
-    here = beyond(walk, place, step);
+    here = beyond(walk, found, step);
   }
   return { places, stop: "no-cycle" };
 }
@@ -139,13 +163,16 @@ function startOf(rule: Rule, start: BifurcationsOptions["initial"]): Float64Arra
 }
 
 function followedCycle(
-  walk: Walk,
+  walk: Omit<Walk, "scale">,
   from: number,
   start: number,
   limit: number,
 ): Pick<Bifurcations, "places" | "stop"> {
   const cycle = settleInCycle(walk.held, start);
-  return cycle === undefined ? { places: [], stop: "no-cycle" } : follow(walk, { at: from, cycle }, limit);
+  if (cycle === undefined) return { places: [], stop: "no-cycle" };
+  const sizes = [...cycle.points, start].map(Math.abs);
+  const scale = Math.max(...sizes) || Math.max(...walk.held.parameters.map(Math.abs)) || 1;
+  return follow({ ...walk, scale }, { at: from, cycle }, limit);
 }
 
 /**
@@ -171,12 +198,12 @@ export function bifurcations(rule: Rule, options: BifurcationsOptions): Bifurcat
   const found =
     held.width === 1
       ? followedCycle({ held, slot, to }, from, start[0]!, limit)
-      : followRestLevel(held, slot, { from, to }, start, limit);
-  return Object.freeze({
+      : followEquilibrium(held, slot, { from, to }, start, limit);
+  return {
     kind: "bifurcations",
     rule,
     vary,
-    places: Object.freeze(found.places),
+    places: found.places,
     stop: found.stop,
-  });
+  };
 }

@@ -56,6 +56,28 @@ export function polishCycle(held: HeldStep, start: readonly number[]): readonly 
   return points;
 }
 
+/** A cycle at one value of a parameter, with the product of its slopes. */
+export interface Followed {
+  readonly points: readonly number[];
+  readonly slope: number;
+}
+
+/** Product of the slopes along a cycle, and the largest gap between a step from one point and the next point. */
+export function slopeAlong(
+  held: HeldStep,
+  points: readonly number[],
+): { readonly slope: number; readonly residual: number } {
+  const state = new Float64Array(1);
+  let [slope, residual] = [1, 0];
+  points.forEach((x, i) => {
+    state[0] = x;
+    const { next, matrix } = held.slopes(state);
+    slope *= matrix[0]!;
+    residual = Math.max(residual, Math.abs(next[0]! - points[(i + 1) % points.length]!));
+  });
+  return { slope, residual };
+}
+
 /** The points that a start visits in `period` steps. */
 export function orbit(held: HeldStep, start: number, period: number): readonly number[] {
   const state = Float64Array.of(start);

@@ -4,7 +4,7 @@ import { type Multiplier, multipliersOf } from "../rest/multiplier.js";
 import { type Stability, stabilityOf } from "../rest/stability.js";
 import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.js";
 import { type SearchRange, searchRanges } from "../setting/search-range.js";
-import { cyclesOfOneState } from "./cycle-points.js";
+import { cyclesOfOneState, slopeAlong } from "./cycle-points.js";
 
 /** Values that come round again after a number of periods, and not before. */
 export interface Cycle extends Stability {
@@ -33,33 +33,25 @@ export interface Cycles {
 export interface CyclesOptions extends HeldSetting {
   /** Periods until the values come round; a whole number from 1. */
   readonly period: number;
-  /** Default: the rule's bounds, else a million times the largest parameter either way. */
+  /** Default: the rule's bounds, or as far as its parameters and its turns from rising to falling suggest. */
   readonly range?: SearchRange;
 }
 
 const shown = (value: number): string => String(Number(value.toPrecision(6)));
 
 function described(held: HeldStep, points: readonly number[]): Cycle {
-  const state = new Float64Array(1);
-  let slope = 1;
-  let residual = 0;
-  points.forEach((x, i) => {
-    state[0] = x;
-    const { next, matrix } = held.slopes(state);
-    slope *= matrix[0]!;
-    residual = Math.max(residual, Math.abs(next[0]! - points[(i + 1) % points.length]!));
-  });
+  const { slope, residual } = slopeAlong(held, points);
   const [multiplier] = multipliersOf(Float64Array.of(slope), 1);
   const stability = stabilityOf([multiplier!]);
   const list = points.map(shown).join(", ");
-  return Object.freeze({
-    points: Object.freeze([...points]),
+  return {
+    points: [...points],
     multiplier: multiplier!,
     residual,
     superstable: Math.abs(slope) < 1e-9,
     ...stability,
     sentence: `The cycle of ${points.length} values ${list} ${stability.words}.`,
-  });
+  };
 }
 
 /**
@@ -77,17 +69,15 @@ export function cycles(rule: Rule, options: CyclesOptions): Cycles {
     throw unreadableOption("period", "a whole number from 1 to 64", period);
   }
   const held = holdStep(rule, options, "cycle");
-  const within = searchRanges(rule, held.parameters, options.range)[0]!;
+  const within = searchRanges(held, options.range)[0]!;
   const found = cyclesOfOneState(held, period, within);
-  return Object.freeze({
+  return {
     kind: "cycles",
     rule,
     period,
-    parameters: Object.freeze(
-      Object.fromEntries(rule.parameters.map((name, i) => [name, held.parameters[i]!])),
-    ),
+    parameters: Object.fromEntries(rule.parameters.map((name, i) => [name, held.parameters[i]!])),
     range: within,
-    cycles: Object.freeze(found.cycles.map((points) => described(held, points))),
+    cycles: found.cycles.map((points) => described(held, points)),
     search: found.complete ? "every" : "cut-short",
-  });
+  };
 }

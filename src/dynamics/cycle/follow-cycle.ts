@@ -1,25 +1,7 @@
 import type { HeldStep } from "../setting/held-step.js";
-import { orbit, polishCycle } from "./cycle-points.js";
-
-/** A cycle at one value of a parameter, with the product of its slopes. */
-export interface Followed {
-  readonly points: readonly number[];
-  readonly slope: number;
-}
+import { type Followed, orbit, polishCycle, slopeAlong } from "./cycle-points.js";
 
 const longestPeriod = 128;
-
-function slopeAlong(held: HeldStep, points: readonly number[]): { slope: number; residual: number } {
-  const state = new Float64Array(1);
-  let [slope, residual] = [1, 0];
-  points.forEach((x, i) => {
-    state[0] = x;
-    const { next, matrix } = held.slopes(state);
-    slope *= matrix[0]!;
-    residual = Math.max(residual, Math.abs(next[0]! - points[(i + 1) % points.length]!));
-  });
-  return { slope, residual };
-}
 
 /** The cycle near given points at the parameters as they are now; undefined where it is gone. */
 export function followCycle(held: HeldStep, near: readonly number[]): Followed | undefined {

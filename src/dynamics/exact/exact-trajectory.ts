@@ -100,12 +100,12 @@ export function exactTrajectory(rule: Rule, options: ExactTrajectoryOptions): Ex
   }
   const column = <T>(of: (value: Rational) => T, slot: number): T[] => rows.map((row) => of(row[slot]!));
   const byState = <T>(of: (slot: number) => T): Readonly<Record<string, T>> =>
-    Object.freeze(Object.fromEntries(rule.states.map((name, slot) => [name, of(slot)])));
-  return Object.freeze({
+    Object.fromEntries(rule.states.map((name, slot) => [name, of(slot)]));
+  return {
     kind: "exact-trajectory",
     rule,
     periods,
-    values: byState((slot) => Object.freeze(column(rationalText, slot))),
+    values: byState((slot) => column(rationalText, slot)),
     numbers: byState((slot) => Float64Array.from(column(toNumber, slot))),
-  });
+  };
 }

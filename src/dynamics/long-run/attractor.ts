@@ -86,7 +86,7 @@ export function attractor(rule: Rule, options: AttractorOptions): Attractor {
       }
     });
   }
-  return Object.freeze({ kind: "attractor", rule, vary, state: state!, at, values, perColumn, estimate });
+  return { kind: "attractor", rule, vary, state: state!, at, values, perColumn, estimate };
 }
 
 /** The same first value for every state and every past value that the rule reads. */

@@ -117,12 +117,12 @@ export function basins(rule: Rule, options: BasinsOptions): Basins {
   });
   const list = found
     .filter(({ from }) => from.length > 0)
-    .map((basin) => Object.freeze({ ...basin, probability: probabilityOf(basin.from, within, options) }));
-  return Object.freeze({
+    .map((basin) => ({ ...basin, probability: probabilityOf(basin.from, within, options) }));
+  return {
     kind: "basins",
     rule,
     range: within,
-    basins: Object.freeze(list),
-    borders: Object.freeze(borders),
-  });
+    basins: list,
+    borders,
+  };
 }

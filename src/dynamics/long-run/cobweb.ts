@@ -66,7 +66,7 @@ export function cobweb(rule: Rule, options: CobwebOptions): Cobweb {
       return at[0]!;
     });
   const next = stepped(present);
-  return Object.freeze({
+  return {
     kind: "cobweb",
     rule,
     state: state!,
@@ -75,5 +75,5 @@ export function cobweb(rule: Rule, options: CobwebOptions): Cobweb {
     secondNext: stepped(next),
     web: corners(values),
     equilibria: equilibria(rule, { ...options, range: within }).points,
-  });
+  };
 }

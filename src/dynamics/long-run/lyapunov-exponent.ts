@@ -103,7 +103,7 @@ export function lyapunovExponent(rule: Rule, options: LyapunovExponentOptions = 
     sum += mean;
     return sum / (i + 1);
   });
-  return Object.freeze({
+  return {
     kind: "lyapunov-exponent",
     rule,
     value,
@@ -113,5 +113,5 @@ export function lyapunovExponent(rule: Rule, options: LyapunovExponentOptions = 
     settling,
     verdict,
     sentence: sentenceOf(verdict, value, interval),
-  });
+  };
 }

@@ -76,13 +76,13 @@ export function matrixGrowth(rule: Rule, setting: HeldSetting = {}): MatrixGrowt
   const sensitivities = rows.map((row, i) => row.map((_, j) => (left[i]! * right[j]!) / product));
   const second = multipliers.find((one) => one !== first);
   const sums = rows.map((_, j) => rows.reduce((sum, row) => sum + row[j]!, 0));
-  return Object.freeze({
+  return {
     kind: "matrix-growth",
     rule,
     states: rule.states,
     matrix: rows,
     dominant,
-    multipliers: Object.freeze(multipliers),
+    multipliers,
     structure: right,
     reproductiveValues: left.map((value) => value / left[0]!),
     sensitivities,
@@ -90,5 +90,5 @@ export function matrixGrowth(rule: Rule, setting: HeldSetting = {}): MatrixGrowt
     dampingRatio:
       second === undefined || second.modulus === 0 ? Number.POSITIVE_INFINITY : dominant / second.modulus,
     firstPeriod: { most: Math.max(...sums), least: Math.min(...sums) },
-  });
+  };
 }

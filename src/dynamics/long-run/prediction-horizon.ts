@@ -45,5 +45,5 @@ export function predictionHorizon(
   const sentence = Number.isFinite(periods)
     ? `Single values can be foretold for about ${Math.floor(periods)} periods; beyond, give the long-run range of values and how often a limit is passed.`
     : "Small errors do not grow, so chaos sets no horizon; the parameters' uncertainty and random change still do.";
-  return Object.freeze({ kind: "prediction-horizon", lyapunovExponent: found, periods, interval, sentence });
+  return { kind: "prediction-horizon", lyapunovExponent: found, periods, interval, sentence };
 }

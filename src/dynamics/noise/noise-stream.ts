@@ -1,3 +1,4 @@
+import { seededWords } from "../../numeric/index.js";
 import { noiseKernelBytes } from "./noise-kernel-bytes.js";
 
 /** Values are made so many at a time at most. */
@@ -54,24 +55,6 @@ function kernel(): Kernel {
     };
   }
   return loaded;
-}
-
-/**
- * Four words from one seed.
- *
- * @see Steele, Lea and Flood (2014), Fast splittable pseudorandom number generators, OOPSLA: SplitMix64.
- */
-function seededWords(seed: number): BigUint64Array {
-  const words = new BigUint64Array(4);
-  let state = BigInt(seed);
-  const wrapped = (value: bigint): bigint => BigInt.asUintN(64, value);
-  for (let k = 0; k < 4; k++) {
-    state = wrapped(state + 0x9e3779b97f4a7c15n);
-    let word = wrapped((state ^ (state >> 30n)) * 0xbf58476d1ce4e5b9n);
-    word = wrapped((word ^ (word >> 27n)) * 0x94d049bb133111ebn);
-    words[k] = word ^ (word >> 31n);
-  }
-  return words;
 }
 
 /**

@@ -7,7 +7,7 @@ export interface Multiplier {
   readonly modulus: number;
 }
 
-const made = (re: number, im: number): Multiplier => Object.freeze({ re, im, modulus: Math.hypot(re, im) });
+const made = (re: number, im: number): Multiplier => ({ re, im, modulus: Math.hypot(re, im) });
 
 /** Both roots of z^2 - trace z + determinant, without cancellation. */
 function pairOf(trace: number, determinant: number): readonly Multiplier[] {

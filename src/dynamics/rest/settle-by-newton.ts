@@ -2,7 +2,7 @@ import { Matrix, solve } from "ml-matrix";
 import { type HeldStep, settled } from "../setting/held-step.js";
 
 /** Slopes of the next present values by settled present values [states, states], and the gap to rest. */
-function linearisedGap(held: HeldStep, present: Float64Array): { gap: Float64Array; slopes: Matrix } {
+export function linearisedGap(held: HeldStep, present: Float64Array): { gap: Float64Array; slopes: Matrix } {
   const { rule, width } = held;
   const states = rule.states.length;
   const { next, matrix } = held.slopes(settled(rule, present));

@@ -82,7 +82,7 @@ export function guaranteedDigits(rule: Rule, options: GuaranteedOptions = {}): G
     const kept = known.center.every(
       (value, i) => known.radius[i]! <= 0.5 * 10 ** -digits * Math.abs(value) || known.radius[i] === 0,
     );
-    if (!kept) return Object.freeze({ digits, periods: t - 1, throughout: false });
+    if (!kept) return { digits, periods: t - 1, throughout: false };
   }
-  return Object.freeze({ digits, periods, throughout: true });
+  return { digits, periods, throughout: true };
 }

@@ -4,8 +4,7 @@ import type { FitOptions } from "../options/fit-options.js";
 import { refuseNoStart, refuseTooFew } from "../refusals.js";
 import { criteria } from "../result/criteria.js";
 import { describeFit } from "../result/describe-fit.js";
-import { type Estimate, estimatesOf } from "../result/estimate-of.js";
-import type { GroupFit } from "../result/group-fit.js";
+import { estimatesOf } from "../result/estimate-of.js";
 import { combinedRows, gather } from "../rows/combined-rows.js";
 import { cutOf } from "../search/cut.js";
 import { type Optimum, optimum } from "../search/optimum.js";
@@ -15,12 +14,8 @@ import { normalEquations } from "../systems/normal-equations.js";
 import { prepared } from "../systems/prepared.js";
 import { sharedUnknowns } from "../unknowns/shared-unknowns.js";
 import { unknownsOf } from "../unknowns/unknowns.js";
-
-/** Groups fitted together: each group's part of the result, and the parameters that hold for all. */
-export interface JointFit {
-  readonly groups: readonly GroupFit[];
-  readonly population: readonly Estimate[];
-}
+import { commonParameters } from "./common-parameters.js";
+import type { JointFit } from "./joint-fit.js";
 
 /**
  * Fits the same parameters to all groups by least squares, with an initial state for every group and one sigma. In each
@@ -46,24 +41,21 @@ export function combinedFit(rule: Rule, groups: readonly ObservedGroup[], option
   const level = options.level ?? 0.95;
   const left = rows.count - rows.size;
   const estimates = estimatesOf(rule, all, found, level, left);
+  const common = commonParameters(
+    own,
+    parts,
+    maps.map((map) => gather(found.at, map, new Float64Array(map.length))),
+    { sumOfSquares: found.value, free: rows.size, knownSd: options.sd !== undefined },
+  );
+  const measures = { sigma: Math.sqrt(found.value / left), exact: true };
   return {
+    criteria: criteria(found.value, rows, options),
+    ...(common && { commonParameters: common }),
     population: estimates.filter(({ role }) => role === "parameter"),
     groups: groups.map((group, g) => {
-      const measures = {
-        criteria: criteria(found.value, rows, options),
-        sigma: Math.sqrt(found.value / left),
-        exact: true,
-      };
-      const part = describeFit(
-        rule,
-        group,
-        options,
-        own[g]!,
-        parts[g]!.rows,
-        partOf(found, maps[g]!, rows.size),
-        measures,
-      );
-      return Object.freeze({ ...part, degreesOfFreedom: left });
+      const searched = { group, unknowns: own[g]!, rows: parts[g]!.rows };
+      const part = describeFit(rule, searched, options, partOf(found, maps[g]!, rows.size), measures);
+      return { ...part, degreesOfFreedom: left };
     }),
   };
 }

@@ -1,40 +1,50 @@
 import type { ObservedGroup } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
 import { checkGroup } from "../options/check-group.js";
-import { bySquares, type FitOptions } from "../options/fit-options.js";
-import { refuseTogether } from "../refusals.js";
-import type { Estimate } from "../result/estimate-of.js";
+import type { FitOptions } from "../options/fit-options.js";
+import type { Search } from "../problem/search.js";
+import { kindOf, searchOf } from "../problem/search-of.js";
+import { refuseNoStart, refuseStepsFromZero, refuseTogether } from "../refusals.js";
+import { addedCriteria } from "../result/criteria.js";
+import { describeFit } from "../result/describe-fit.js";
 import type { GroupFit } from "../result/group-fit.js";
+import { optimum } from "../search/optimum.js";
 import { stateSpaceFit } from "../state-space/state-space-fit.js";
 import { unknownsOf } from "../unknowns/unknowns.js";
 import { combinedFit } from "./combined-fit.js";
-import { likelihoodFit } from "./likelihood-fit.js";
+import type { JointFit } from "./joint-fit.js";
 import { mixedFit } from "./mixed-fit.js";
-import { squaresFit } from "./squares-fit.js";
 
 /** Fits a rule to one group of a record. */
 function fitGroup(rule: Rule, group: ObservedGroup, options: FitOptions): GroupFit {
   checkGroup(rule, group, options, unknownsOf(rule, options));
-  if (options.errors === "both") return stateSpaceFit(rule, group, options);
-  return bySquares(options) && !isCensored(rule, group)
-    ? squaresFit(rule, group, options)
-    : likelihoodFit(rule, group, options);
+  if (kindOf(rule, group, options) === "state-space") return stateSpaceFit(rule, group, options);
+  return solved(rule, searchOf(rule, group, options), options);
+}
+
+function solved(rule: Rule, search: Search, options: FitOptions): GroupFit {
+  const starts = search.starts();
+  if (starts.length === 0) throw noStart(rule, search, options);
+  const { objective, unknowns, cutAt } = search;
+  const found = optimum(objective, unknowns, starts, cutAt, options.intervals !== "none");
+  return describeFit(rule, search, options, found, search.measures(found.at, found.value));
+}
+
+/** Why no start was found: of counts most often a step from 0. */
+function noStart(rule: Rule, { group, family }: Search, options: FitOptions): Error {
+  const column = group.values[rule.states[0]!]!;
+  const from = column.findIndex((value, row) => value === 0 && column[row + 1]! > 0);
+  const stuck = family?.counts === true && options.errors === "process" && from >= 0;
+  return stuck ? refuseStepsFromZero(group, group.rows[from]!, rule.text) : refuseNoStart(group, rule.text);
 }
 
 /** Fits all groups of a record: each on its own, with the same parameters, or with parameters from a population. */
-export function fitGroups(
-  rule: Rule,
-  groups: readonly ObservedGroup[],
-  options: FitOptions,
-): { readonly groups: readonly GroupFit[]; readonly population?: readonly Estimate[] } {
+export function fitGroups(rule: Rule, groups: readonly ObservedGroup[], options: FitOptions): JointFit {
   const { groups: how = "separate" } = options;
-  if (how === "separate" || (how === "combined" && groups.length === 1))
-    return { groups: groups.map((group) => fitGroup(rule, group, options)) };
-  if (bySquares(options) && !groups.some((group) => isCensored(rule, group)))
-    return how === "combined" ? combinedFit(rule, groups, options) : mixedFit(rule, groups, options);
-  throw refuseTogether(how);
-}
-
-function isCensored(rule: Rule, group: ObservedGroup): boolean {
-  return rule.states.some((state) => group.censoring?.[state]?.some((mark) => mark !== 0));
+  if (how === "separate" || (how === "combined" && groups.length === 1)) {
+    const apart = groups.map((group) => fitGroup(rule, group, options));
+    return { groups: apart, criteria: addedCriteria(apart.map(({ criteria }) => criteria!)) };
+  }
+  if (groups.some((group) => kindOf(rule, group, options) !== "least-squares")) throw refuseTogether(how);
+  return how === "combined" ? combinedFit(rule, groups, options) : mixedFit(rule, groups, options);
 }

@@ -19,7 +19,7 @@ import { startingPoints } from "../search/starting-points.js";
 import { type Penalty, penalisedSystem } from "../systems/penalised-system.js";
 import { type Prepared, prepared } from "../systems/prepared.js";
 import { type Unknowns, unknownsOf } from "../unknowns/unknowns.js";
-import type { JointFit } from "./combined-fit.js";
+import type { JointFit } from "./joint-fit.js";
 
 /** One group in a mixed fit: its own least squares, drawn towards the population. */
 interface Member {
@@ -58,11 +58,7 @@ export function mixedFit(rule: Rule, groups: readonly ObservedGroup[], options: 
   minusTwice(found.at);
   const variance = found.at[2 * parameters]!;
   const count = members.reduce((sum, each) => sum + each.part.rows.count, 0);
-  const measures = {
-    criteria: criteriaOf(-0.5 * found.value, count, population.names.length),
-    sigma: Math.sqrt(variance),
-    exact: false,
-  };
+  const measures = { sigma: Math.sqrt(variance), exact: false };
   const size = population.names.length;
   const weights = penalty.roots.map((root) => root ** 2 / variance);
   const means = Float64Array.from(
@@ -70,6 +66,7 @@ export function mixedFit(rule: Rule, groups: readonly ObservedGroup[], options: 
     (_, k) => found.covariance[Math.floor(k / parameters) * size + (k % parameters)]!,
   );
   return {
+    criteria: criteriaOf(-0.5 * found.value, count, population.names.length),
     population: estimatesOf(rule, population, found, options.level ?? 0.95, undefined),
     groups: members.map(({ group, own, part, system, at }) => {
       system.evaluate(at);
@@ -77,10 +74,8 @@ export function mixedFit(rule: Rule, groups: readonly ObservedGroup[], options: 
       const unscaled = covarianceFromTriangle(system.triangle, system.size, 1e-7);
       return describeFit(
         rule,
-        group,
+        { group, unknowns: own, rows: part.rows },
         options,
-        own,
-        part.rows,
         {
           ...found,
           at,

@@ -1,16 +1,8 @@
-import {
-  type MinimiseOptions,
-  minimiseSquares,
-  randomStream,
-  squaresWorkspace,
-} from "../../numeric/index.js";
-import type { Fit } from "../fit.js";
-import { refuseFewDraws, refuseUnknownName } from "../refusals.js";
-import { type RefitProblem, refitProblem } from "../resampling/refit-problem.js";
-import { normalErrors, recordMaker } from "../resampling/simulate-record.js";
+import { randomStream } from "../../numeric/index.js";
+import { type Fit, problemOf } from "../fit.js";
+import type { RecordDraw, Refitter } from "../problem/refitter.js";
+import { refuseFewDraws, refuseNotBySquares, refuseUnknownName } from "../refusals.js";
 import type { GroupFit } from "../result/group-fit.js";
-import { valueTable } from "../rows/value-table.js";
-import type { Unknowns } from "../unknowns/unknowns.js";
 import type { Interval } from "./interval.js";
 
 /** Options of `gridInterval`. */
@@ -40,7 +32,7 @@ const halvings = 10;
  * @example gridInterval(crowdingFit, "r", { resamples: 49 }).kind; // "grid"
  */
 export function gridInterval(fit: Fit, name: string, options: GridIntervalOptions = {}): Interval {
-  const { resamples: draws = 399, seed = 1, level = fit.options.level ?? 0.95 } = options;
+  const { resamples: draws = 399, seed = 1, level = problemOf(fit).level } = options;
   if (!(Number.isInteger(draws) && draws >= 20)) throw refuseFewDraws(draws);
   const fitted = fit.groups.find((each) => each.group === (options.group ?? fit.groups[0]!.group))!;
   const i = fitted.estimates.findIndex((each) => each.name === name);
@@ -50,7 +42,10 @@ export function gridInterval(fit: Fit, name: string, options: GridIntervalOption
       fitted.estimates.map((each) => each.name),
       "estimated parameter",
     );
-  const ordinary = ordinaryAt(refitProblem(fit, fitted), fitted, i, draws, seed);
+  const group = problemOf(fit).group(fitted.group);
+  const again = group.kind === "least-squares" ? group.refitter() : undefined;
+  if (again?.draw === undefined) throw refuseNotBySquares("gridInterval");
+  const ordinary = ordinaryAt(again, again.draw, fitted, i, draws, seed);
   const tail = (1 - level) / 2;
   const reach = reachOf(fitted, i);
   const lower = limit(fitted.estimates[i]!.value, -reach, (value) => 1 - ordinary(value) >= tail);
@@ -60,45 +55,31 @@ export function gridInterval(fit: Fit, name: string, options: GridIntervalOption
 
 /** Share of records simulated with unknown i at a value whose signed root lies at or below the fit's own. */
 function ordinaryAt(
-  problem: RefitProblem,
+  { take, minimise, minimiseHeld, recorded, at }: Refitter,
+  draw: RecordDraw,
   fitted: GroupFit,
   i: number,
   draws: number,
   seed: number,
 ): (value: number) => number {
-  const { rule, group, unknowns, rows, system, at } = problem;
-  const make = recordMaker(rule, group, unknowns, rows, problem.options);
-  const workspace = squaresWorkspace(system.size);
-  const limits: MinimiseOptions = { lower: unknowns.lower, upper: unknowns.upper, workspace };
   const signedRoot = (start: Float64Array, value: number): number => {
-    const free = minimiseSquares(system, start, limits);
-    const held = minimiseSquares(system, free.estimates, holding(limits, unknowns, i, value));
-    const rise = Math.max(0, held.sumOfSquares - free.sumOfSquares) / free.sumOfSquares;
+    const free = minimise(start);
+    const held = minimiseHeld(free.estimates, i, value);
+    const rise = Math.max(0, held.value - free.value) / free.value;
     return Math.sign(free.estimates[i]! - value) * Math.sqrt(rise * fitted.degreesOfFreedom);
   };
-  const recorded = valueTable(rule, group);
   return (value) => {
-    rows.take(recorded);
+    take(recorded);
     const own = signedRoot(at, value);
-    const held = minimiseSquares(system, at, holding(limits, unknowns, i, value));
-    const draw = normalErrors(rows, Math.sqrt(held.sumOfSquares / (fitted.degreesOfFreedom + 1)));
+    const held = minimiseHeld(at, i, value);
+    const sigma = Math.sqrt(held.value / (fitted.degreesOfFreedom + 1));
     // The same draws at every value, so that the share changes smoothly with it.
     const stream = randomStream(seed);
     let below = 0;
-    for (let k = 0; k < draws; k++) {
-      rows.take(make(held.estimates, draw(stream)));
-      if (signedRoot(held.estimates, value) <= own) below++;
-    }
+    for (let k = 0; k < draws; k++)
+      if (draw(stream, { at: held.estimates, sigma }) && signedRoot(held.estimates, value) <= own) below++;
     return below / draws;
   };
-}
-
-function holding(limits: MinimiseOptions, unknowns: Unknowns, i: number, value: number): MinimiseOptions {
-  const lower = unknowns.lower.slice();
-  const upper = unknowns.upper.slice();
-  lower[i] = value;
-  upper[i] = value;
-  return { ...limits, lower, upper };
 }
 
 /** A first distance to try: that of the profile's limits, else a tenth of the estimate. */

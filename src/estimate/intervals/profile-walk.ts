@@ -1,4 +1,6 @@
 import type { Lowest, Objective } from "../search/objective.js";
+import { holding, type SearchBounds, searchFrom } from "../search/search-bounds.js";
+import { continuations } from "./continuations.js";
 
 /** What a profile starts from: the optimum, and where its cut lies. */
 export interface ProfileProblem {
@@ -6,106 +8,150 @@ export interface ProfileProblem {
   readonly estimates: Float64Array;
   /** Lowest sum of squares, or twice the negative log-likelihood. */
   readonly value: number;
+  /** Admitted values. */
   readonly lower: Float64Array;
   readonly upper: Float64Array;
+  /** [unknowns]: 1 or -1 where the best value lies beyond any limit upwards or downwards, else 0. */
+  readonly unbounded: Int8Array;
+  /** Where the unknowns that are not held are looked for. */
+  readonly within: SearchBounds;
   /** What an increase is divided by: sigma^2 by the fit's convention; 1 for a likelihood. */
   readonly variance: number;
   /** [size, size]: where the other unknowns go when one is moved; NaN where not known. */
   readonly covariance: Float64Array;
   /** Other ends of searches, tried where a profile seems to leave its cut. */
   readonly others: readonly Float64Array[];
+  /** Where the searches for the optimum began, tried at a limit. */
+  readonly starts: readonly Float64Array[];
   /** Critical value of the increase. */
   readonly cut: number;
   /** The critical value that must be passed on both sides for the unknown to count as determined. */
   readonly firmCut: number;
 }
 
-/** Root of the increase minus root of the cut, and its slope. */
-export interface Excess {
+/** The lowest point found with the unknown held at a value. */
+export interface ProfilePoint {
   readonly value: number;
+  readonly estimates: Float64Array;
+  /** Over the optimum, in units of the variance; infinite where the rule breaks down. */
+  readonly increase: number;
+  /** Root of the increase minus root of the cut, and its slope. */
   readonly excess: number;
   readonly slope: number;
 }
 
 export interface ProfileWalk {
-  /** At a value of the unknown; an infinite excess where the rule breaks down. */
-  readonly at: (value: number) => Excess;
-  readonly restart: () => void;
-  readonly trace: { value: number; increase: number }[];
-  /** Points within the cut. */
-  readonly inside: readonly Float64Array[];
+  /** Finite points by increasing value, the lowest met at each; the optimum is one. */
+  readonly points: readonly ProfilePoint[];
+  /** @param everyStart - searches from all points that offer themselves, not only from the most promising. */
+  readonly at: (value: number, everyStart?: boolean) => ProfilePoint;
+  /** A point lower than the optimum by more than rounding, if one was met. */
   readonly better: () => Float64Array | undefined;
 }
 
-/** Refits with unknown i held, each time from the optimum at the value before. */
-export function profileWalk(problem: ProfileProblem, i: number): ProfileWalk {
-  const { objective, estimates, variance, cut } = problem;
-  const lower = problem.lower.slice();
-  const upper = problem.upper.slice();
-  let from: Float64Array = estimates.slice();
-  const trace: { value: number; increase: number }[] = [];
-  const inside: Float64Array[] = [];
-  let better: Float64Array | undefined;
-  return {
-    trace,
-    inside,
-    better: () => better,
-    restart: () => {
-      from = estimates.slice();
-    },
-    at(value) {
-      lower[i] = value;
-      upper[i] = value;
-      let held = objective.minimise(shifted(problem, from, i, value), lower, upper);
-      const limit = problem.value + cut * variance;
-      // A search that got stuck would make the interval too narrow: outside the cut, other starts are tried as well.
-      if (!(held.value <= limit)) held = lowestOf(held, problem, lower, upper, i, value);
-      const slope = objective.slope(i);
-      if (!Number.isFinite(held.value)) return { value, excess: Number.POSITIVE_INFINITY, slope: 0 };
-      from = held.estimates;
-      const rise = held.value - problem.value;
-      if (rise < -1e-6 * variance) better = from.slice();
-      const increase = Math.max(0, rise) / variance;
-      trace.push({ value, increase });
-      if (increase < cut) inside.push(from);
-      const root = Math.sqrt(increase);
-      return { value, excess: root - Math.sqrt(cut), slope: slope / (2 * variance * root) };
-    },
-  };
-}
+/** A fall below the optimum that counts, in units of the variance. */
+const fall = 1e-5;
 
-/** The lowest of a search and of those from other ends, the last one made being the one kept. */
-function lowestOf(
-  held: Lowest,
+/**
+ * Refits with unknown i held, each continued from the points already met beside it.
+ *
+ * @param seeds - points met elsewhere to continue from as well.
+ */
+export function profileWalk(
   problem: ProfileProblem,
-  lower: Float64Array,
-  upper: Float64Array,
   i: number,
-  value: number,
-): Lowest {
-  let best = held;
-  for (const other of problem.others) {
-    const found = problem.objective.minimise(shifted(problem, other, i, value), lower, upper);
-    if (found.value < best.value) best = found;
-  }
-  // The slope is that of the search made last.
-  return problem.others.length === 0 ? best : problem.objective.minimise(best.estimates, lower, upper);
+  seeds: readonly Float64Array[] = [],
+): ProfileWalk {
+  const { variance, cut, estimates } = problem;
+  const root = Math.sqrt(cut);
+  const points: ProfilePoint[] = [{ value: estimates[i]!, estimates, increase: 0, excess: -root, slope: 0 }];
+  let better: Float64Array | undefined;
+  const visited = (value: number, { lowest, slope }: HeldLowest): ProfilePoint => {
+    const rise = lowest.value - problem.value;
+    const at = lowest.estimates;
+    if (!Number.isFinite(rise))
+      return { value, estimates: at, increase: Infinity, excess: Infinity, slope: 0 };
+    if (rise < -fall * variance) better = at;
+    const increase = Math.max(0, rise) / variance;
+    const height = Math.sqrt(increase);
+    const point = {
+      value,
+      estimates: at,
+      increase,
+      excess: height - root,
+      slope: slope / (2 * variance * height),
+    };
+    return keep(points, point);
+  };
+  const at = (value: number, everyStart = false): ProfilePoint =>
+    visited(value, continued(problem, points, i, value, everyStart));
+  for (const seed of seeds) visited(seed[i]!, lowestHeld(problem, [seed], i, seed[i]!));
+  return { points, at, better: () => better };
 }
 
-/** A point moved to a value of unknown i, the others going along as their covariance with it says where that is lower. */
-function shifted(
-  { covariance, objective }: ProfileProblem,
-  from: Float64Array,
+/** Puts a point in its place; of two with the same value the lower is kept, and returned. */
+function keep(points: ProfilePoint[], point: ProfilePoint): ProfilePoint {
+  const next = points.findIndex(({ value }) => value >= point.value);
+  const place = next < 0 ? points.length : next;
+  const same = points[place]?.value === point.value ? points[place] : undefined;
+  if (same !== undefined && same.increase <= point.increase) return same;
+  points.splice(place, same === undefined ? 0 : 1, point);
+  return point;
+}
+
+/** Where a search with one unknown held ended. */
+export interface HeldLowest {
+  readonly lowest: Lowest;
+  /** Of the objective by the unknown held. */
+  readonly slope: number;
+}
+
+function continued(
+  problem: ProfileProblem,
+  points: readonly ProfilePoint[],
   i: number,
   value: number,
-): Float64Array {
-  const size = from.length;
-  const spread = covariance[i * size + i]!;
-  const move = value - from[i]!;
-  const still = from.slice();
-  still[i] = value;
-  if (!(spread > 0)) return still;
-  const moved = from.map((here, k) => here + (covariance[k * size + i]! / spread) * move);
-  moved[i] = value;
-  return objective.value(moved) < objective.value(still) ? moved : still;
+  everyStart: boolean,
+): HeldLowest {
+  const near = continuations(problem, points, i, value);
+  const first = lowestHeld(problem, near.slice(0, 1), i, value);
+  const { value: height, stop } = first.lowest;
+  const within = height <= problem.value + problem.cut * problem.variance;
+  const settled = stop.kind === "converged" && stop.test === "gradient";
+  if (within && settled && !everyStart) return first;
+  // A search that got stuck would make the interval too narrow: outside the cut, other starts are tried as well.
+  const further = everyStart || !settled ? [...near.slice(1), ...problem.others] : problem.others;
+  if (further.length === 0) return first;
+  return lowestHeld(problem, [first.lowest.estimates, ...further], i, value);
+}
+
+const nowhere: Lowest = {
+  estimates: new Float64Array(0),
+  value: Number.POSITIVE_INFINITY,
+  stop: { kind: "failed", reason: "no point from which to search" },
+  evaluations: 0,
+};
+
+/** The lowest end of searches from several points, with unknown i held. */
+export function lowestHeld(
+  { objective, lower, upper, within, variance }: ProfileProblem,
+  starts: readonly Float64Array[],
+  i: number,
+  value: number,
+): HeldLowest {
+  const admitted = holding({ lower, upper }, i, value);
+  const near = holding(within, i, value);
+  const search = (from: Float64Array): Lowest => searchFrom(objective, from, admitted, near, () => variance);
+  let lowest = nowhere;
+  let last = nowhere;
+  for (const start of starts) {
+    if (start.length === 0) continue;
+    const from = start.slice();
+    from[i] = value;
+    last = search(from);
+    if (last.value < lowest.value) lowest = last;
+  }
+  // The slope is that where the last search ended.
+  if (last !== lowest) lowest = search(lowest.estimates);
+  return { lowest, slope: Number.isFinite(lowest.value) ? objective.slope(i) : 0 };
 }

@@ -1,4 +1,4 @@
-import type { ObservedGroup } from "../../record/index.js";
+import { inputByPeriod, type ObservedGroup } from "../../record/index.js";
 import { inputOffsets, type Rule } from "../../rule/index.js";
 import {
   refuseAllCensored,
@@ -34,13 +34,12 @@ function checkNumber(rule: Rule, group: ObservedGroup, options: FitOptions, name
 function checkInputs(rule: Rule, group: ObservedGroup, options: FitOptions): void {
   const reach = rule.inputs.length === 0 ? [] : inputOffsets(rule);
   rule.inputs.forEach((name, k) => {
-    const column = group.inputs[name];
-    if (!column) throw refuseMissingInput(name, group);
+    if (!group.inputs[name]) throw refuseMissingInput(name, group);
     const [earliest, latest] = reach[k]!;
-    const known = new Set(Array.from(group.index).filter((_, i) => Number.isFinite(column[i])));
+    const column = inputByPeriod(group, name);
     for (const period of steppedPeriods(rule, group, options))
       for (let at = period + earliest; at <= period + latest; at++)
-        if (!known.has(at)) throw refuseInputGap(name, group, at);
+        if (!Number.isFinite(column[at])) throw refuseInputGap(name, group, at);
   });
 }
 

@@ -1,9 +1,10 @@
 import { quantile, type RandomStream, randomStream } from "../../numeric/index.js";
-import type { Fit } from "../fit.js";
+import { type Fit, problemOf } from "../fit.js";
 import type { Interval } from "../intervals/interval.js";
-import { refuseFewDraws } from "../refusals.js";
+import type { RecordDraw, Refitter } from "../problem/refitter.js";
+import { refuseFewDraws, refuseNoDraws, refuseSharedParameters } from "../refusals.js";
 import type { GroupFit } from "../result/group-fit.js";
-import { type ResampledErrors, type Resampler, resampler } from "./resampler.js";
+import { type ResampledErrors, residualDraw } from "./residual-draw.js";
 
 /** Options of `bootstrap`. */
 export interface BootstrapOptions {
@@ -44,44 +45,48 @@ export interface Bootstrap {
 }
 
 /**
- * Refits a least-squares or state-space fit to records simulated from it, and gives the middle share of the estimates as
- * interval (percentiles, definition 7).
+ * Refits each group of a fit to records simulated from it, and gives the middle share of the estimates as interval
+ * (percentiles, definition 7).
  *
- * @throws {ModelError} `not-by-least-squares` for fits by another likelihood or of groups together; `no-residuals` for
- *   residuals of a state-space fit; `too-few-draws`.
+ * @throws {ModelError} `groups-together` for groups that share parameters; `not-simulated` for censored values and weighted
+ *   counts; `no-residuals` for residuals of counts or of a state-space fit; `too-few-draws`.
  * @see Davison and Hinkley (1997), Bootstrap Methods and their Application, sections 7.3 and 8.2.
  * @example bootstrap(crowdingFit, { resamples: 99 }).rows[0].name; // "r"
  */
 export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
   const { errors = "parametric", resamples = 999, seed = 1 } = options;
   if (!(Number.isInteger(resamples) && resamples >= 20)) throw refuseFewDraws(resamples);
+  const problem = problemOf(fit);
   let stream = randomStream(seed);
   let used = 0;
   const rows = fit.groups.flatMap((fitted) => {
     const own = stream;
     stream = stream.jump();
-    const again = resampler(fit, fitted, errors, options.block);
-    const refits = refitsOf(again, fitted.estimates.length, { ...options, resamples }, own);
+    const again = problem.group(fitted.group).refitter();
+    if (again === undefined) throw refuseSharedParameters();
+    const draw = errors === "parametric" ? again.draw : residualDraw(again, errors, options.block);
+    if (draw === undefined) throw refuseNoDraws();
+    const refits = refitsOf(again, draw, { ...options, resamples }, own);
     used += refits.length;
-    return rowsOf(fitted, refits, options.level ?? fit.options.level ?? 0.95);
+    return rowsOf(fitted, refits, options.level ?? problem.level);
   });
   const failed = fit.groups.length * resamples - used;
-  return Object.freeze({ kind: "bootstrap", errors, seed, rows: Object.freeze(rows), used, failed });
+  return { kind: "bootstrap", errors, seed, rows, used, failed };
 }
 
 /** The estimates of the refits, as reported. */
 function refitsOf(
-  { refit, reported }: Resampler,
-  size: number,
+  { minimise, reported, at }: Refitter,
+  draw: RecordDraw,
   { resamples, onProgress }: BootstrapOptions & { resamples: number },
   stream: RandomStream,
 ): readonly Float64Array[] {
   const found: Float64Array[] = [];
   for (let k = 0; k < resamples; k++) {
     if (k % 100 === 0 && onProgress?.(k, resamples) === false) break;
-    const { estimates, stop } = refit(stream);
-    if (stop.kind === "converged")
-      found.push(Float64Array.from({ length: size }, (_, i) => reported(i, estimates[i]!)));
+    if (draw(stream) === undefined) continue;
+    const { estimates, stop } = minimise(at);
+    if (stop.kind === "converged") found.push(estimates.map((value, i) => reported(i, value)));
   }
   return found;
 }

@@ -8,8 +8,12 @@ export interface Criteria {
   readonly aic: number;
   /** Infinite where n - k - 1 is not positive. */
   readonly aicCorrected: number;
+  /** k ln n - 2 log-likelihood. */
+  readonly bic: number;
   /** k: the free unknowns, and sigma where it was found from the record. */
   readonly counted: number;
+  /** n: values compared. */
+  readonly count: number;
 }
 
 /**
@@ -36,5 +40,20 @@ export function criteriaOf(logLikelihood: number, count: number, counted: number
   const aic = 2 * counted - 2 * logLikelihood;
   const room = count - counted - 1;
   const aicCorrected = room > 0 ? aic + (2 * counted * (counted + 1)) / room : Number.POSITIVE_INFINITY;
-  return { logLikelihood, aic, aicCorrected, counted };
+  const bic = counted * Math.log(count) - 2 * logLikelihood;
+  return { logLikelihood, aic, aicCorrected, bic, counted, count };
+}
+
+/** The criteria of groups fitted by themselves, each an independent model with a sigma of its own: all of them add up. */
+export function addedCriteria(groups: readonly Criteria[]): Criteria {
+  const sum = (of: (criteria: Criteria) => number): number =>
+    groups.reduce((total, each) => total + of(each), 0);
+  return {
+    logLikelihood: sum((each) => each.logLikelihood),
+    aic: sum((each) => each.aic),
+    aicCorrected: sum((each) => each.aicCorrected),
+    bic: sum((each) => each.bic),
+    counted: sum((each) => each.counted),
+    count: sum((each) => each.count),
+  };
 }

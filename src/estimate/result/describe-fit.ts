@@ -1,7 +1,7 @@
 import type { ObservedGroup } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
 import type { FitOptions } from "../options/fit-options.js";
-import type { FitRows } from "../rows/fit-rows.js";
+import type { Measures, Search } from "../problem/search.js";
 import type { Optimum } from "../search/optimum.js";
 import { longestLag } from "../unknowns/slots.js";
 import { place, type Unknowns } from "../unknowns/unknowns.js";
@@ -11,25 +11,18 @@ import { fitPoints } from "./fit-points.js";
 import { fitWarnings } from "./fit-warnings.js";
 import type { GroupFit } from "./group-fit.js";
 
-/** What differs between fits by least squares and by other likelihoods. */
-export interface Measures {
-  readonly criteria: Criteria;
-  /** Where the spread is an unknown of its own. */
-  readonly sigma: number | undefined;
-  /** Whether intervals and errors are those of n - p degrees of freedom (least squares), or of large samples. */
-  readonly exact: boolean;
-}
+/** What was searched in a group, or the group's part of what was searched in all. */
+export type Searched = Pick<Search, "group" | "unknowns" | "rows" | "weightsAt" | "warnings">;
 
-/** A group's optimum as a result to be read. */
+/** A group's optimum as a result to be read; without criteria where they are those of all groups. */
 export function describeFit(
   rule: Rule,
-  group: ObservedGroup,
+  searched: Searched,
   options: FitOptions,
-  unknowns: Unknowns,
-  rows: FitRows,
   found: Optimum,
-  { criteria, sigma, exact }: Measures,
+  { criteria, sigma, exact, overdispersion }: Omit<Measures, "criteria"> & { readonly criteria?: Criteria },
 ): GroupFit {
+  const { group, unknowns, rows } = searched;
   const degreesOfFreedom = rows.count - unknowns.names.length;
   const points = fitPoints(rule, group, rows, found);
   const sumOfSquares = points.reduce((sum, { residual }, i) => sum + (residual * rows.roots[i]!) ** 2, 0);
@@ -50,7 +43,8 @@ export function describeFit(
     count: rows.count,
     degreesOfFreedom,
     sigma: sigma ?? Math.sqrt(sumOfSquares / degreesOfFreedom),
-    criteria,
+    ...(criteria && { criteria }),
+    ...(overdispersion && { overdispersion }),
     cut: found.cut.cut,
     stop: found.stop,
     points,
@@ -59,7 +53,8 @@ export function describeFit(
       behind: (value - found.value) / found.cut.variance / 2,
     })),
   };
-  return Object.freeze({ ...fitted, warnings: fitWarnings(fitted, { rule, options, unknowns, found }) });
+  const own = searched.warnings?.(found.at) ?? [];
+  return { ...fitted, warnings: [...fitWarnings(fitted, { rule, options, unknowns, found }), ...own] };
 }
 
 /** Values of the states where the path begins: estimated or given ones, or the first recorded ones. */

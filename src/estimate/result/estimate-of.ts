@@ -32,30 +32,52 @@ export function estimatesOf(
   level: number,
   degreesOfFreedom: number | undefined,
 ): readonly Estimate[] {
-  const size = unknowns.names.length;
   const tail = (1 + level) / 2;
   const reach =
     degreesOfFreedom === undefined ? normalQuantile(tail) : studentQuantile(tail, degreesOfFreedom);
   return unknowns.names.map((name, i) => {
-    const role = unknowns.roles[i]!;
     const rooted = unknowns.rooted[i]!;
     const value = reported(rooted, found.at[i]!);
-    const error = Math.sqrt(found.covariance[i * size + i]!) / (rooted ? 2 * value : 1);
-    const standardError = found.determined[i] && Number.isFinite(error) ? error : undefined;
-    const profile = found.profiles?.[i];
     return {
       name,
-      role,
+      role: unknowns.roles[i]!,
       unit: rule.units[name] ?? "",
       value,
-      standardError,
-      profile: profile === undefined ? notComputed(level) : intervalOf(profile, rooted, level),
-      wald: isNearParabola(found.at[i]!, profile)
-        ? waldInterval(value, standardError, reach, level)
-        : undefined,
-      trace: (profile?.trace ?? []).map((at) => ({ ...at, value: reported(rooted, at.value) })),
+      ...(found.stop.kind === "failed" ? notKnown(level) : known(found, i, value, rooted, reach, level)),
     };
   });
+}
+
+type Precision = Pick<Estimate, "standardError" | "profile" | "wald" | "trace">;
+
+/** A search that failed ends nowhere that an error could be put on. */
+const notKnown = (level: number): Precision => ({
+  standardError: undefined,
+  profile: noInterval(level, "the search failed"),
+  wald: undefined,
+  trace: [],
+});
+
+function known(
+  found: Optimum,
+  i: number,
+  value: number,
+  rooted: boolean,
+  reach: number,
+  level: number,
+): Precision {
+  const size = found.at.length;
+  const error = Math.sqrt(found.covariance[i * size + i]!) / (rooted ? 2 * value : 1);
+  const standardError = found.determined[i] && Number.isFinite(error) ? error : undefined;
+  const profile = found.profiles?.[i];
+  return {
+    standardError,
+    profile: profile === undefined ? noInterval(level, "not asked for") : intervalOf(profile, rooted, level),
+    wald: isNearParabola(found.at[i]!, profile)
+      ? waldInterval(value, standardError, reach, level)
+      : undefined,
+    trace: (profile?.trace ?? []).map((at) => ({ ...at, value: reported(rooted, at.value) })),
+  };
 }
 
 /** Sides of a profile whose lengths differ by more than this factor are no parabola: common practice, no source. */
@@ -70,10 +92,14 @@ function isNearParabola(at: number, profile: Profile | undefined): boolean {
 
 function intervalOf({ lower, upper, note }: Profile, rooted: boolean, level: number): Interval {
   const limit = (value: number | undefined): number | undefined =>
-    value === undefined ? undefined : reported(rooted, value);
-  return { kind: "profile", level, lower: limit(lower), upper: limit(upper), note };
+    value !== undefined && Number.isFinite(value) ? reported(rooted, value) : undefined;
+  const limits = { lower: limit(lower), upper: limit(upper) };
+  // No interval has no width: where both ends meet, no profile could be followed.
+  if (limits.lower !== undefined && limits.lower === limits.upper)
+    return noInterval(level, "its profile cannot be followed");
+  return { kind: "profile", level, ...limits, note };
 }
 
-function notComputed(level: number): Interval {
-  return { kind: "profile", level, lower: undefined, upper: undefined, note: "not asked for" };
+function noInterval(level: number, note: string): Interval {
+  return { kind: "profile", level, lower: undefined, upper: undefined, note };
 }

@@ -1,4 +1,4 @@
-import type { ObservedGroup } from "../../record/index.js";
+import { labelAt, type ObservedGroup } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
 import type { FitRows } from "../rows/fit-rows.js";
 import type { Optimum } from "../search/optimum.js";
@@ -10,11 +10,17 @@ export interface FitPoint {
   readonly index: number;
   /** The period column's value there. */
   readonly time: number;
+  /** The label of the period, where periods are not mere numbers. */
+  readonly label?: string;
   readonly row: number;
   readonly observed: number;
   readonly fitted: number;
   /** Observed minus fitted, on the fitting scale. */
   readonly residual: number;
+  /** The record's weight or the number of replicates averaged, over the square of a known standard deviation. */
+  readonly weight: number;
+  /** 0 exact; -1 where the value is only known to lie at or below `observed`, 1 at or above it. */
+  readonly censoring: number;
   /** Share of its own fitted value that this value decides: 0 to 1; NaN where a parameter is not determined. */
   readonly leverage: number;
 }
@@ -30,14 +36,18 @@ export function fitPoints(
   return Array.from({ length: rows.count }, (_, i) => {
     const residual = rows.residualAt(i) / rows.roots[i]!;
     const entry = rows.entries[i]!;
+    const state = rule.states[rows.states[i]!]!;
     return {
-      state: rule.states[rows.states[i]!]!,
+      state,
       index: group.index[entry]!,
       time: group.time[entry]!,
+      ...(group.axis.counts !== "numbers" && { label: labelAt(group.axis, group.index[entry]!) }),
       row: group.rows[entry]!,
       observed: rows.observed[i]!,
       fitted: rows.fitted(),
       residual,
+      weight: rows.roots[i]! ** 2,
+      censoring: group.censoring?.[state]?.[entry] ?? 0,
       leverage: leverage(rows.row, found.covariance) / found.cut.variance,
     };
   });

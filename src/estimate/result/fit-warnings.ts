@@ -6,6 +6,7 @@ import type { Unknowns } from "../unknowns/unknowns.js";
 import { correlationWarnings } from "./correlation-warnings.js";
 import type { Estimate } from "./estimate-of.js";
 import type { GroupFit } from "./group-fit.js";
+import { overdispersionWarnings } from "./overdispersion.js";
 import { slopeWarnings } from "./slope-warnings.js";
 
 /** Usable values a parameter below which a fit carries a caution: common practice, no source. */
@@ -31,6 +32,7 @@ export function fitWarnings(fit: Omit<GroupFit, "warnings">, context: FitContext
     ...bends(fit, context.rule),
     ...slopeWarnings(fit, context),
     ...fewValues(fit),
+    ...overdispersionWarnings(fit.overdispersion),
   ];
 }
 

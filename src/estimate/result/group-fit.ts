@@ -3,6 +3,7 @@ import type { Filtered } from "../state-space/filtered.js";
 import type { Criteria } from "./criteria.js";
 import type { Estimate } from "./estimate-of.js";
 import type { FitPoint } from "./fit-points.js";
+import type { Overdispersion } from "./overdispersion.js";
 
 /** The fit of one group of a record. */
 export interface GroupFit {
@@ -21,7 +22,8 @@ export interface GroupFit {
   readonly degreesOfFreedom: number;
   /** sqrt(RSS/(n - p)), on the fitting scale. */
   readonly sigma: number;
-  readonly criteria: Criteria;
+  /** Absent where groups are fitted together: the fit has one for all of them. */
+  readonly criteria?: Criteria;
   /** Critical value of the profile's increase. */
   readonly cut: number;
   readonly stop: StopReason;
@@ -30,5 +32,7 @@ export interface GroupFit {
   readonly rivals: readonly { readonly estimates: readonly number[]; readonly behind: number }[];
   /** Of a fit with both kinds of error. */
   readonly filter?: Filtered;
+  /** Of a Poisson fit: whether the counts scatter more than that. */
+  readonly overdispersion?: Overdispersion;
   readonly warnings: readonly Warning[];
 }

@@ -1,6 +1,9 @@
+import { ruleLabel } from "../../rule/index.js";
 import type { Fit } from "../fit.js";
+import type { Criteria } from "./criteria.js";
 import type { Estimate } from "./estimate-of.js";
 import type { FitPoint } from "./fit-points.js";
+import type { GroupFit } from "./group-fit.js";
 
 /** A row of the estimates view: one unknown of one group. */
 export interface EstimateRow extends Omit<Estimate, "trace"> {
@@ -14,13 +17,19 @@ export function estimates(fit: Fit): readonly EstimateRow[] {
   );
 }
 
+/** A row of the points view: one compared value of one group. */
+export interface PointRow extends FitPoint {
+  readonly group: string;
+}
+
 /** Every residual of every group of a fit. */
-export function points(fit: Fit): readonly (FitPoint & { readonly group: string })[] {
+export function points(fit: Fit): readonly PointRow[] {
   return fit.groups.flatMap((group) => group.points.map((point) => ({ group: group.group, ...point })));
 }
 
-/** A row of the summary view: one group. */
+/** A row of the summary view: one group, or all groups that were fitted together. */
 export interface SummaryRow {
+  /** "" where there is one group, or where all were fitted together. */
   readonly group: string;
   readonly rule: string;
   readonly count: number;
@@ -33,18 +42,40 @@ export interface SummaryRow {
   readonly stop: string;
 }
 
-/** One row a group: size, scatter, likelihood and why the search stopped. */
+/** Size, scatter, likelihood and why the search stopped: a row for every likelihood of the fit. */
 export function summary(fit: Fit): readonly SummaryRow[] {
-  return fit.groups.map((group) => ({
+  const [first] = fit.groups;
+  if (fit.population !== undefined && first !== undefined)
+    return [
+      rowOf(fit, { ...first, group: "", sumOfSquares: squaresOf(fit) }, fit.criteria, freeUnknowns(fit)),
+    ];
+  return fit.groups.map((group) => rowOf(fit, group, group.criteria ?? fit.criteria, group.estimates.length));
+}
+
+function rowOf(fit: Fit, group: GroupFit, criteria: Criteria, parameters: number): SummaryRow {
+  return {
     group: group.group,
-    rule: fit.rule.text,
-    count: group.count,
-    parameters: group.estimates.length,
+    rule: ruleLabel(fit.rule),
+    count: criteria.count,
+    parameters,
     sumOfSquares: group.sumOfSquares,
     sigma: group.sigma,
-    logLikelihood: group.criteria.logLikelihood,
-    aic: group.criteria.aic,
-    aicCorrected: group.criteria.aicCorrected,
+    logLikelihood: criteria.logLikelihood,
+    aic: criteria.aic,
+    aicCorrected: criteria.aicCorrected,
     stop: group.stop.kind,
-  }));
+  };
+}
+
+function squaresOf({ groups }: Fit): number {
+  return groups.reduce((sum, each) => sum + each.sumOfSquares, 0);
+}
+
+/** How many unknowns a fit has found, sigma of least squares not counted; those that groups share once. */
+export function freeUnknowns({ groups, population }: Fit): number {
+  const own = groups.map(
+    ({ estimates }) =>
+      estimates.filter(({ role }) => population === undefined || role !== "parameter").length,
+  );
+  return own.reduce((sum, each) => sum + each, population?.length ?? 0);
 }

@@ -1,15 +1,21 @@
 import type { FitRows } from "./fit-rows.js";
 import type { Readings } from "./readings.js";
 
+/** One-step predictions of a filter, one entry a reading, on the fitting scale. */
+export interface Predictions {
+  readonly mean: Float64Array;
+  readonly deviation: Float64Array;
+}
+
 /** The one-step predictions of a filter, from reading number `skipped` on, as the values that a fit compares. */
 export function predictionRows(
   readings: Readings,
   size: number,
   skipped: number,
-  log: boolean,
-  run: (at: Float64Array, predicted: Float64Array) => number,
+  predicted: Predictions,
+  from: (scaled: number) => number,
+  run: (at: Float64Array) => void,
 ): FitRows {
-  const predicted = new Float64Array(readings.count);
   let fitted = 0;
   return {
     size,
@@ -21,12 +27,10 @@ export function predictionRows(
     observed: readings.observed.subarray(skipped),
     roots: readings.roots.subarray(skipped),
     take: readings.take,
-    prepare(at) {
-      run(at, predicted);
-    },
+    prepare: run,
     residualAt(i) {
-      const mean = predicted[i + skipped]!;
-      fitted = log ? Math.exp(mean) : mean;
+      const mean = predicted.mean[i + skipped]!;
+      fitted = from(mean);
       return readings.roots[i + skipped]! * (readings.values[i + skipped]! - mean);
     },
     fitted: () => fitted,

@@ -17,8 +17,11 @@ export interface Readings {
   /** Period at which the filter begins, and how many readings lie there. */
   readonly first: number;
   readonly skipped: number;
-  /** [slots], on the fitting scale: the state vector as read where the filter begins. */
+  /** [slots]: the state vector as read where the filter begins, on the fitting scale, and roots of its weights. */
   readonly beginning: Float64Array;
+  readonly beginningRoots: Float64Array;
+  /** [slots]: the number of the state that a slot holds, now or from the past. */
+  readonly slotStates: Int32Array;
   /** Puts other values [rows of the group, states] in the record's place. */
   take(values: Float64Array): void;
 }
@@ -57,6 +60,9 @@ export function readingsOf(rule: Rule, group: ObservedGroup, options: FitOptions
     });
   };
   take(recorded);
+  // One known standard deviation for all readings is a variance of the filter, which may be 0; a column of them weighs.
+  const column = typeof options.sd === "string" ? options.sd : undefined;
+  const readingRoot = (state: string, entry: number): number => rootWeight(group, state, entry, column);
   return {
     count: cells.length,
     periods: Int32Array.from(cells, ({ entry }) => group.index[entry]!),
@@ -64,12 +70,12 @@ export function readingsOf(rule: Rule, group: ObservedGroup, options: FitOptions
     states: Int32Array.from(cells, ({ state }) => state),
     values,
     observed,
-    roots: Float64Array.from(cells, ({ entry, state }) =>
-      rootWeight(group, rule.states[state]!, entry, undefined),
-    ),
+    roots: Float64Array.from(cells, ({ entry, state }) => readingRoot(rule.states[state]!, entry)),
     first,
     skipped: cells.filter(({ entry }) => group.index[entry] === first).length,
     beginning,
+    beginningRoots: Float64Array.from(slots, ({ entry, state }) => readingRoot(rule.states[state]!, entry)),
+    slotStates: Int32Array.from(slots, ({ state }) => state),
     take,
   };
 }

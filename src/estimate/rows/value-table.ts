@@ -13,16 +13,18 @@ export function valueTable(rule: Rule, group: ObservedGroup): Float64Array {
 }
 
 /**
- * Root of the weight of a row's value: one over a standard deviation that is known, else the root of the record's own weight, or the number of technical replicates that were
- * averaged, whose mean scatters less by the root of their number.
+ * Root of the weight of a row's value: that of the record's own weight, or of the number of technical replicates that were
+ * averaged, whose mean scatters less by the root of their number; over the standard deviation where one is known.
+ *
+ * @param sd - a number, or the column that holds one for every row.
  */
 export function rootWeight(
   group: ObservedGroup,
   state: string,
   entry: number,
-  sd: number | undefined,
+  sd: number | string | undefined,
 ): number {
-  const known = sd === undefined ? 1 : 1 / sd;
+  const known = typeof sd === "string" ? group.inputs[sd]![entry]! : (sd ?? 1);
   const weight = group.weights?.[entry] ?? group.replicates?.[state]?.count[entry] ?? 1;
-  return known * Math.sqrt(weight);
+  return Math.sqrt(weight) / known;
 }

@@ -29,7 +29,8 @@ export function likelihoodObjective(
     size,
     value,
     minimise(start, low, high) {
-      scale ??= start.map((each) => Math.abs(each) || 1);
+      // Each search by the size of its own start: one that began far off would leave the others with huge steps.
+      scale = start.map((each) => Math.abs(each) || 1);
       const found = minimise(value, start, { lower: low, upper: high, scale, ...(inverse && { inverse }) });
       last = Float64Array.from(found.estimates);
       return found;

@@ -5,11 +5,14 @@ import { type FitOptions, onLogScale } from "../options/fit-options.js";
 import type { FitRows } from "../rows/fit-rows.js";
 import { type Prepared, prepared } from "../systems/prepared.js";
 import { type Unknowns, unknownsOf } from "../unknowns/unknowns.js";
+import { searchBounds } from "./search-bounds.js";
 import { trialPoints } from "./trial-values.js";
 
 /** How many of the best trial points are carried on, and polished to a few digits. */
 const kept = 5;
 const polish = { gradientTolerance: 1e-4, iterationLimit: 60 };
+/** How far beyond the middle of the points kept a polished point may move. */
+const polishReach = 100;
 /** Points looked at: a few for speed, many where those led nowhere. */
 const fewTrials = 300;
 const manyTrials = 10_000;
@@ -99,7 +102,12 @@ function ranked(points: readonly Float64Array[], { system }: Prepared, keep: num
   return distinct.slice(0, keep);
 }
 
-function polished(points: readonly Point[], { system }: Prepared, { lower, upper }: Unknowns): Point[] {
+function polished(points: readonly Point[], { system }: Prepared, unknowns: Unknowns): Point[] {
+  const { lower, upper } = searchBounds(
+    unknowns,
+    points.map(({ at }) => at),
+    polishReach,
+  );
   return sorted(
     points.map((point) => {
       const done = minimiseSquares(system, point.at, { lower, upper, ...polish });

@@ -1,3 +1,4 @@
+import type { Predictions } from "../rows/prediction-rows.js";
 import type { Readings } from "../rows/readings.js";
 
 /** A rule of one state that is linear on the fitting scale, u' = intercept + slope u, with its errors' variances. */
@@ -24,14 +25,14 @@ export function longRun({ intercept, slope, processVariance }: LinearRule): Scal
  * Log-likelihood of the readings from number `from` on, by the exact Kalman filter in plain numbers, the belief
  * standing at the period where the readings begin.
  *
- * @param predicted - receives the one-step predictions, where given.
+ * @param told - receives the one-step predictions and their standard deviations, where given.
  */
 export function linearFilter(
   rule: LinearRule,
   readings: Readings,
   from: number,
   belief: ScalarBelief,
-  predicted: Float64Array | undefined,
+  told: Predictions | undefined,
 ): number {
   const { intercept, slope, processVariance } = rule;
   const { periods, values, roots, count } = readings;
@@ -43,8 +44,11 @@ export function linearFilter(
       mean = intercept + slope * mean;
       variance = slope * slope * variance + processVariance;
     }
-    if (predicted !== undefined) predicted[i] = mean;
     const spread = variance + rule.readingVariance / (roots[i]! * roots[i]!);
+    if (told !== undefined) {
+      told.mean[i] = mean;
+      told.deviation[i] = Math.sqrt(spread);
+    }
     const surprise = values[i]! - mean;
     const gain = variance / spread;
     mean += gain * surprise;

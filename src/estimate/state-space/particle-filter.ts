@@ -53,9 +53,10 @@ function begin(
   { states, slots }: Cloud,
   stream: RandomStream,
 ): void {
+  const sds = readings.beginningRoots.map((root, slot) => readingSd[readings.slotStates[slot]!]! / root);
   for (let k = 0; k < states.length; k++) {
     const slot = k % slots;
-    const value = readings.beginning[slot]! + readingSd[slot % dynamics.states]! * stream.normal();
+    const value = readings.beginning[slot]! + sds[slot]! * stream.normal();
     states[k] = dynamics.log ? Math.exp(value) : value;
   }
 }

@@ -1,12 +1,15 @@
+import type { RandomStream } from "../../numeric/index.js";
 import type { ObservedGroup } from "../../record/index.js";
 import { compileRule, dependsOnPeriod, type Rule } from "../../rule/index.js";
 import { type FitOptions, onLogScale } from "../options/fit-options.js";
+import { scaleOf } from "../problem/scale.js";
 import type { FitRows } from "../rows/fit-rows.js";
 import { inputsByPeriod } from "../rows/inputs-by-period.js";
-import { predictionRows } from "../rows/prediction-rows.js";
+import { type Predictions, predictionRows } from "../rows/prediction-rows.js";
 import { type Readings, readingsOf } from "../rows/readings.js";
 import { slotsOf } from "../unknowns/slots.js";
 import { place, type Unknowns } from "../unknowns/unknowns.js";
+import { drawStateSpace } from "./draw-state-space.js";
 import { type Belief, type Dynamics, predict, scratch, takeIn } from "./kalman-step.js";
 import { type LinearRule, linearFilter, longRun } from "./linear-filter.js";
 import type { ParticleModel } from "./particle-filter.js";
@@ -23,6 +26,10 @@ export interface StateSpace {
   readonly particleModel: (at: Float64Array) => ParticleModel;
   /** Standard deviation of a reading in the long run; NaN where there is none. */
   readonly longRunSd: (at: Float64Array) => number;
+  /** One-step prediction errors over their standard deviations, [values compared]. */
+  readonly standardised: (at: Float64Array) => Float64Array;
+  /** A record drawn at the unknowns given: values [rows of the group, states], own unit. */
+  readonly draw: (at: Float64Array, stream: RandomStream) => Float64Array;
 }
 
 /** How the first reading is taken, and whether the rule is linear, so that the filter is exact. */
@@ -55,7 +62,8 @@ export function stateSpace(
   const readings = readingsOf(rule, group, options);
   const { parameters, spreads } = unknowns;
   const variance = new Float64Array(rule.states.length);
-  const known = options.sd;
+  // Known standard deviations of single readings are part of their weights.
+  const known = typeof options.sd === "string" ? 1 : options.sd;
   const readingVariance = (s: number): number =>
     known === undefined ? spreads[rule.states.length + s]! : known * known;
   const from = start === "diffuse" ? readings.skipped : 0;
@@ -64,25 +72,32 @@ export function stateSpace(
     place(unknowns, at);
     for (let s = 0; s < variance.length; s++) variance[s] = spreads[s]!;
   };
-  const exact = (predicted?: Float64Array): number => {
+  const exact = (told?: Predictions): number => {
     const linear = linearAt(dynamics, parameters, readings, variance[0]!, readingVariance(0));
     const first =
       start === "stationary"
         ? longRun(linear)
-        : { mean: readings.beginning[0]!, variance: linear.readingVariance };
+        : {
+            mean: readings.beginning[0]!,
+            variance: linear.readingVariance / readings.beginningRoots[0]! ** 2,
+          };
     if (first === undefined) return Number.NaN;
-    const sum = linearFilter(linear, readings, from, first, predicted);
+    const sum = linearFilter(linear, readings, from, first, told);
     belief.mean[0] = first.mean;
     belief.covariance[0] = first.variance;
     return sum;
   };
-  const extended = (predicted?: Float64Array): number => {
-    beginAsRead(belief, readings, readingVariance, rule.states.length);
-    return extendedFilter(belief, dynamics, parameters, readings, from, variance, readingVariance, predicted);
+  const extended = (told?: Predictions): number => {
+    beginAsRead(belief, readings, readingVariance);
+    return extendedFilter(belief, dynamics, parameters, readings, from, variance, readingVariance, told);
   };
-  const run = (at: Float64Array, predicted?: Float64Array): number => {
+  const run = (at: Float64Array, told?: Predictions): number => {
     setDown(at);
-    return method === "exact" ? exact(predicted) : extended(predicted);
+    return method === "exact" ? exact(told) : extended(told);
+  };
+  const predicted: Predictions = {
+    mean: new Float64Array(readings.count),
+    deviation: new Float64Array(readings.count),
   };
   return {
     belief,
@@ -106,7 +121,15 @@ export function stateSpace(
       const linear = linearAt(dynamics, parameters, readings, variance[0]!, readingVariance(0));
       return Math.sqrt((longRun(linear)?.variance ?? Number.NaN) + readingVariance(0));
     },
-    rows: predictionRows(readings, unknowns.names.length, from, dynamics.log, run),
+    draw: drawStateSpace(rule, group, options, unknowns, readings, start, readingVariance),
+    standardised(at) {
+      run(at, predicted);
+      const all = readings.values.map((value, i) => (value - predicted.mean[i]!) / predicted.deviation[i]!);
+      return all.subarray(from);
+    },
+    rows: predictionRows(readings, unknowns.names.length, from, predicted, scaleOf(options).from, (at) => {
+      run(at, predicted);
+    }),
   };
 }
 
@@ -163,14 +186,14 @@ function linearAt(
 
 function beginAsRead(
   belief: Belief,
-  { beginning }: Readings,
+  { beginning, beginningRoots, slotStates }: Readings,
   readingVariance: (state: number) => number,
-  states: number,
 ): void {
   const slots = beginning.length;
   belief.mean.set(beginning);
   belief.covariance.fill(0);
-  for (let i = 0; i < slots; i++) belief.covariance[i * slots + i] = readingVariance(i % states);
+  for (let i = 0; i < slots; i++)
+    belief.covariance[i * slots + i] = readingVariance(slotStates[i]!) / beginningRoots[i]! ** 2;
 }
 
 function extendedFilter(
@@ -181,15 +204,19 @@ function extendedFilter(
   from: number,
   variance: Float64Array,
   readingVariance: (state: number) => number,
-  predicted: Float64Array | undefined,
+  told: Predictions | undefined,
 ): number {
   let period = readings.first;
   let sum = 0;
   for (let i = from; i < readings.count; i++) {
     for (; period < readings.periods[i]!; period++) predict(belief, dynamics, parameters, period, variance);
     const s = readings.states[i]!;
-    if (predicted) predicted[i] = belief.mean[s]!;
-    sum += takeIn(belief, dynamics, s, readings.values[i]!, readingVariance(s) / readings.roots[i]! ** 2);
+    const own = readingVariance(s) / readings.roots[i]! ** 2;
+    if (told !== undefined) {
+      told.mean[i] = belief.mean[s]!;
+      told.deviation[i] = Math.sqrt(belief.covariance[s * (belief.mean.length + 1)]! + own);
+    }
+    sum += takeIn(belief, dynamics, s, readings.values[i]!, own);
   }
   return sum;
 }

@@ -5,11 +5,12 @@ import type { GroupChangePoint } from "./group-change-point.js";
 export function breakSentence(found: Omit<GroupChangePoint, "sentence">, fit: Fit, level: number): string {
   const who = found.group === "" ? "" : `${found.group}: `;
   const chance = `${Math.max(1, Math.round(100 * found.probability))}%`;
-  const { column } = fit.observations.period;
-  const named = (value: number): string => Number(value.toPrecision(6)).toString();
+  const { axis } = fit.observations;
+  const { date, earliest, latest } = found.labels;
+  const on = axis.counts === "numbers" ? `${axis.column} ${date}` : date;
   if (!found.found)
     return (
-      `${who}No break is found: the largest difference, at ${column} ${named(found.date)}, would come up by chance in ` +
+      `${who}No break is found: the largest difference, at ${on}, would come up by chance in ` +
       `${chance} of records without one.`
     );
   const shown = (value: number): string => Number(value.toPrecision(3)).toString();
@@ -21,8 +22,8 @@ export function breakSentence(found: Omit<GroupChangePoint, "sentence">, fit: Fi
     );
   const less = found.probability < 0.01 ? "less than 1%" : chance;
   return (
-    `${who}The rule changed from ${column} ${named(found.date)} on (${Math.round(100 * level)}% interval ` +
-    `${named(found.earliest)} to ${named(found.latest)}): ${moved.join(", ")}. By chance a difference as large comes up ` +
+    `${who}The rule changed from ${on} on (${Math.round(100 * level)}% interval ` +
+    `${earliest} to ${latest}): ${moved.join(", ")}. By chance a difference as large comes up ` +
     `in ${less} of records without a break. Project with the parameters after it only.`
   );
 }

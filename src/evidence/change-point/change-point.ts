@@ -1,12 +1,15 @@
-import { type Fit, type FitOptions, fit as fitRule } from "../../estimate/index.js";
+import { type Fit, type FitOptions, fit as fitRule, problemOf } from "../../estimate/index.js";
 import { randomStream } from "../../numeric/index.js";
 import type { Observations } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
 import { refuseExact } from "../refit/refuse-exact.js";
+import { refuseUnsearched } from "../refusals.js";
 import { type GroupChangePoint, groupChangePoint } from "./group-change-point.js";
 
-/** Options of `changePoint`; those of a fit but for the kind of error, which is the process. */
-export interface ChangePointOptions extends Omit<FitOptions, "errors" | "intervals"> {
+/** Options of `changePoint`; those of a fit by least squares, with errors in the process. */
+export interface ChangePointOptions extends Omit<FitOptions, "errors" | "intervals" | "distribution"> {
+  /** Normal errors on the natural scale (default) or on the log scale; counts are not searched for a break. */
+  readonly distribution?: "normal" | "lognormal";
   /** Least share of the record on either side of a break; default 0.15. */
   readonly leastShare?: number;
   /** Records without a break that the largest F is held against; default 399, with which 5% is met exactly. */
@@ -34,7 +37,7 @@ export interface ChangePoint {
  * far too many), and the interval holds the dates whose likelihood lies within its cut of the best one.
  *
  * @returns per group the date, its interval and both sets of parameters, whether or not a break is found.
- * @throws {ModelError} `too-short-for-a-break` | `exact-fit` and those of `fit`.
+ * @throws {ModelError} `break-not-searched` for counts, censored values, robust fits and groups together; `too-short-for-a-break` | `exact-fit` and those of `fit`.
  * @see Andrews, D. W. K. (1993), Tests for parameter instability and structural change with unknown change point,
  *   Econometrica 61; Diebold, F. X. and Chen, C. (1996), Testing structural stability with endogenous breakpoint, Journal
  *   of Econometrics 70: its distribution in short dynamic records, by drawing them; Eo, Y. and
@@ -50,6 +53,11 @@ export function changePoint(
   const { leastShare = 0.15, resamples = 399, seed = 1, ...others } = options;
   const level = options.level ?? 0.95;
   const fit = fitRule(rule, observations, { ...others, errors: "process", intervals: "none" });
+  const { kind, distribution, groups: together } = problemOf(fit);
+  if (distribution === "poisson" || distribution === "negative-binomial")
+    throw refuseUnsearched("counts", distribution);
+  if (kind !== "least-squares") throw refuseUnsearched("censored");
+  if (together !== "separate" || options.robust === true) throw refuseUnsearched("together");
   refuseExact(fit);
   let stream = randomStream(seed);
   const groups = fit.groups.map((group) => {
@@ -58,12 +66,12 @@ export function changePoint(
     return groupChangePoint(fit, group, { leastShare, draws: resamples, level }, own);
   });
   const sentence = groups.map((group) => group.sentence).join(" ");
-  return Object.freeze({
+  return {
     kind: "change-point",
     fit,
     level,
     resamples,
-    groups: Object.freeze(groups),
+    groups,
     sentence,
-  });
+  };
 }

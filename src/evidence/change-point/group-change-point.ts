@@ -1,7 +1,7 @@
-import type { Fit, GroupFit } from "../../estimate/index.js";
+import { type Fit, type GroupFit, problemOf, type Refitter } from "../../estimate/index.js";
 import type { RandomStream } from "../../numeric/index.js";
-import { type Refitter, refitter } from "../refit/refitter.js";
-import { refuseNoDates } from "../refusals.js";
+import { labelAt } from "../../record/index.js";
+import { refuseNoDates, refuseUnsearched } from "../refusals.js";
 import { type BreakDate, breakScan } from "./break-scan.js";
 import { breakSentence } from "./break-sentence.js";
 import { fRatio, type SupremumDraw, supremumDraw } from "./supremum-draw.js";
@@ -27,6 +27,8 @@ export interface GroupChangePoint {
   readonly date: number;
   readonly earliest: number;
   readonly latest: number;
+  /** The same three as labels of the record's periods. */
+  readonly labels: Readonly<Record<"date" | "earliest" | "latest", string>>;
   readonly before: Regime;
   readonly after: Regime;
   /** F at every date tried. */
@@ -48,14 +50,15 @@ export function groupChangePoint(
   search: BreakSearch,
   stream: RandomStream,
 ): GroupChangePoint {
-  const again = refitter(fit, group);
-  const dates = again ? datesOf(again, search.leastShare) : [];
-  if (again === undefined || dates.length === 0) throw refuseNoDates(group.group, group.count);
+  const again = problemOf(fit).group(group.group).refitter();
+  if (again?.draw === undefined || again.minimisePart === undefined) throw refuseUnsearched("together");
+  const dates = datesOf(again, search.leastShare);
+  if (dates.length === 0) throw refuseNoDates(group.group, group.count);
   const { count, size } = again.rows;
-  const scan = breakScan(again, dates);
-  const best = scan.reduce((low, next) => (next.sumOfSquares < low.sumOfSquares ? next : low));
-  const statistic = fRatio(group.sumOfSquares, best.sumOfSquares, count, size);
-  const probability = chanceOf(statistic, supremumDraw(fit, group, again, dates), search.draws, stream);
+  const scan = breakScan(again, again.minimisePart, dates);
+  const best = scan.reduce((low, next) => (next.value < low.value ? next : low));
+  const statistic = fRatio(group.sumOfSquares, best.value, count, size);
+  const probability = chanceOf(statistic, supremumDraw(again, again.draw, dates), search.draws, stream);
   const found = {
     group: group.group,
     statistic,
@@ -64,7 +67,7 @@ export function groupChangePoint(
     found: probability <= 1 - search.level,
     ...datedBy(fit, group, again, scan, best, search.level),
   };
-  return Object.freeze({ ...found, sentence: breakSentence(found, fit, search.level) });
+  return { ...found, sentence: breakSentence(found, fit, search.level) };
 }
 
 /** The likeliest date with those not told from it, the parameters on either side, and F at every date. */
@@ -75,13 +78,12 @@ function datedBy(
   scan: readonly BreakDate[],
   best: BreakDate,
   level: number,
-): Pick<GroupChangePoint, "date" | "earliest" | "latest" | "before" | "after" | "trace"> {
+): Pick<GroupChangePoint, "date" | "earliest" | "latest" | "labels" | "before" | "after" | "trace"> {
   const { count, size, entries } = again.rows;
-  const { time } = fit.observations.groups.find((each) => each.name === group.group)!;
+  const { time, axis, index } = fit.observations.groups.find((each) => each.name === group.group)!;
   const at = ({ first }: BreakDate): number => time[entries[first]!]!;
-  const close = scan.filter(
-    (date) => count * Math.log(date.sumOfSquares / best.sumOfSquares) <= cutOf(level),
-  );
+  const label = ({ first }: BreakDate): string => labelAt(axis, index[entries[first]!]!);
+  const close = scan.filter((date) => count * Math.log(date.value / best.value) <= cutOf(level));
   const parameters = (values: Float64Array): Regime["parameters"] => ({
     ...group.parameters,
     ...Object.fromEntries(again.unknowns.names.map((name, i) => [name, values[i]!])),
@@ -90,11 +92,16 @@ function datedBy(
     date: at(best),
     earliest: at(close[0]!),
     latest: at(close[close.length - 1]!),
+    labels: {
+      date: label(best),
+      earliest: label(close[0]!),
+      latest: label(close[close.length - 1]!),
+    },
     before: { from: time[0]!, to: time[entries[best.first]! - 1]!, parameters: parameters(best.before) },
     after: { from: at(best), to: time[time.length - 1]!, parameters: parameters(best.after) },
     trace: scan.map((date) => ({
       date: at(date),
-      statistic: fRatio(group.sumOfSquares, date.sumOfSquares, count, size),
+      statistic: fRatio(group.sumOfSquares, date.value, count, size),
     })),
   };
 }

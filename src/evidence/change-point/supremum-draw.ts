@@ -1,7 +1,5 @@
-import type { Fit, GroupFit } from "../../estimate/index.js";
+import type { RecordDraw, Refitter } from "../../estimate/index.js";
 import { choleskyFactor, choleskySolve, type RandomStream } from "../../numeric/index.js";
-import { recordDrawer } from "../refit/record-drawer.js";
-import type { Refitter } from "../refit/refitter.js";
 
 /** Draws the largest F over all dates in a record without a break; undefined where the draw came to nothing. */
 export type SupremumDraw = (stream: RandomStream) => number | undefined;
@@ -11,24 +9,17 @@ export type SupremumDraw = (stream: RandomStream) => number | undefined;
  * at each date both parts take one Gauss-Newton step from that fit, which in a rule linear in its parameters is the whole
  * way.
  */
-export function supremumDraw(
-  fit: Fit,
-  group: GroupFit,
-  again: Refitter,
-  dates: readonly number[],
-): SupremumDraw {
-  const draw = recordDrawer(fit, again, group.sigma);
-  const values = new Float64Array(again.recorded.length);
+export function supremumDraw(again: Refitter, draw: RecordDraw, dates: readonly number[]): SupremumDraw {
   const { count, size } = again.rows;
   const sums = prefixSums(count, size);
   return (stream) => {
-    if (!draw(stream, values)) return undefined;
+    if (draw(stream) === undefined) return undefined;
     const whole = again.minimise(again.at);
     if (whole.stop.kind === "failed") return undefined;
     sums.gather(again, whole.estimates);
     let gain = 0;
     for (const first of dates) gain = Math.max(gain, sums.gain(0, first) + sums.gain(first, count));
-    return fRatio(whole.sumOfSquares, whole.sumOfSquares - gain, count, size);
+    return fRatio(whole.value, whole.value - gain, count, size);
   };
 }
 

@@ -68,13 +68,13 @@ export function check(fit: Fit, options: CheckOptions = {}): Check {
   });
   const named = (group: GroupCheck): string => (group.group === "" ? "" : `${group.group}: `);
   const sentence = groups.map((group) => `${named(group)}${group.sentence}`).join(" ");
-  return Object.freeze({
+  return {
     kind: "check",
     fit,
-    options: Object.freeze(settings),
-    groups: Object.freeze(groups),
+    options: settings,
+    groups,
     sentence,
-  });
+  };
 }
 
 function groupCheck(
@@ -85,12 +85,12 @@ function groupCheck(
 ): GroupCheck {
   const found = {
     group: group.group,
-    tests: residualTests(fit, group),
+    tests: residualTests(fit, group, stream.jump()),
     windows: windows(fit, group),
     lackOfFit: lackOfFit(fit, group),
     recovery: recovery(fit, group, refits, stream),
     errors: errorAdvice(fit, group, adviceDraws, stream),
   };
   const concerns = concernsOf(fit, group, found);
-  return Object.freeze({ ...found, concerns, sentence: verdictOf(group, found, concerns) });
+  return { ...found, concerns, sentence: verdictOf(group, found, concerns) };
 }

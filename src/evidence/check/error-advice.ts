@@ -1,7 +1,5 @@
-import { type Fit, fit as fitRule, type GroupFit } from "../../estimate/index.js";
+import { type Fit, type GroupFit, problemOf, type RecordDraw, type Refitter } from "../../estimate/index.js";
 import { ModelError, type RandomStream } from "../../numeric/index.js";
-import { recordDrawer } from "../refit/record-drawer.js";
-import { type Refitter, refitter } from "../refit/refitter.js";
 import { autocorrelations } from "../statistics/autocorrelation.js";
 import { residualSeries } from "./residual-series.js";
 
@@ -70,26 +68,26 @@ interface Side {
   readonly fit: Fit;
   readonly group: GroupFit;
   readonly again: Refitter;
+  readonly draw: RecordDraw;
 }
 
 /** The fit of one kind, taken over where it is the one given. */
 function sideOf(given: Fit, group: GroupFit, errors: Single): Side | undefined {
-  const alone = given.groups.length === 1 || (given.options.groups ?? "separate") === "separate";
-  const fit = alone && given.options.errors === errors ? given : otherFit(given, group, errors);
+  const problem = problemOf(given);
+  const same = problem.groups === "separate" && problem.errors === errors;
+  const fit = same ? given : otherFit(given, group, errors);
   const own = fit?.groups.find((each) => each.group === group.group);
   if (fit === undefined || own === undefined || !(own.sigma > 0)) return undefined;
-  const again = refitter(fit, own);
-  return again && { fit, group: own, again };
+  const { kind, refitter } = problemOf(fit).group(own.group);
+  const again = kind === "least-squares" ? refitter() : undefined;
+  return again?.draw && { fit, group: own, again, draw: again.draw };
 }
 
 function otherFit(given: Fit, group: GroupFit, errors: Single): Fit | undefined {
   const groups = given.observations.groups.filter((each) => each.name === group.group);
   try {
-    return fitRule(
-      given.rule,
-      { ...given.observations, groups },
-      { ...given.options, errors, intervals: "none" },
-    );
+    const observations = { ...given.observations, groups };
+    return problemOf(given).refit({ observations, errors, intervals: "none" });
   } catch (cause) {
     // Too few pairs for the other kind, for instance: then there is nothing to compare.
     if ((cause as Error).name === ModelError.name) return undefined;
@@ -109,22 +107,21 @@ function differenceOf(process: Side, observation: Side): (values: Float64Array) 
     const steps = process.again.minimise(process.again.at);
     const path = observation.again.minimise(observation.again.at);
     rows.prepare(path.estimates, false);
-    const sum = own.reduce((left, i) => left - rows.residualAt(i) ** 2, path.sumOfSquares);
-    return (-count / 2) * Math.log(sum / steps.sumOfSquares);
+    const sum = own.reduce((left, i) => left - rows.residualAt(i) ** 2, path.value);
+    return (-count / 2) * Math.log(sum / steps.value);
   };
 }
 
 function expectedOf(
-  { fit, group, again }: Side,
+  { draw }: Side,
   measure: (values: Float64Array) => number,
   draws: number,
   stream: RandomStream,
 ): { readonly mean: number; readonly deviation: number } {
-  const draw = recordDrawer(fit, again, group.sigma);
-  const values = new Float64Array(again.recorded.length);
   const found: number[] = [];
   for (let tries = 0; found.length < draws && tries < 2 * draws; tries++) {
-    const difference = draw(stream, values) ? measure(values) : Number.NaN;
+    const values = draw(stream);
+    const difference = values ? measure(values) : Number.NaN;
     if (Number.isFinite(difference)) found.push(difference);
   }
   const mean = found.reduce((sum, value) => sum + value, 0) / found.length;
@@ -142,7 +139,12 @@ function kindOf(weight: number): ErrorAdvice["kind"] {
 }
 
 function lagOneOf({ fit, group }: Side): number {
-  return autocorrelations(residualSeries(group, fit.rule.states[0]!), 1)[0]!;
+  const own = group.points.filter(({ state }) => state === fit.rule.states[0]!);
+  const series = residualSeries(
+    own.map(({ index }) => index),
+    own.map(({ residual }) => residual),
+  );
+  return autocorrelations(series, 1)[0]!;
 }
 
 function sentenceOf(advice: Omit<ErrorAdvice, "sentence">, neither: boolean, count: number): string {

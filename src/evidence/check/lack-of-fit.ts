@@ -1,5 +1,5 @@
-import type { Fit, GroupFit } from "../../estimate/index.js";
-import { fCdf } from "../../numeric/index.js";
+import { type Fit, type GroupFit, problemOf } from "../../estimate/index.js";
+import { fUpperTail } from "../../numeric/index.js";
 
 /** Whether a rule misses its readings by more than replicates differ among themselves. */
 export interface LackOfFit {
@@ -21,9 +21,9 @@ export interface LackOfFit {
  * @see Draper, N. R. and Smith, H. (1998), Applied Regression Analysis, section 2.1.
  */
 export function lackOfFit(fit: Fit, group: GroupFit): readonly LackOfFit[] {
-  const recorded = fit.observations.groups.find((each) => each.name === group.group)!;
-  if (fit.options.errors === "process" || recorded.replicates === undefined) return [];
-  const log = fit.options.distribution === "lognormal";
+  const { scale, errors, group: problemOfGroup } = problemOf(fit);
+  const { recorded, kind } = problemOfGroup(group.group);
+  if (errors !== "observation" || kind !== "least-squares" || recorded.replicates === undefined) return [];
   return fit.rule.states.flatMap((state) => {
     const spread = recorded.replicates?.[state];
     const points = group.points.filter((point) => point.state === state);
@@ -32,13 +32,13 @@ export function lackOfFit(fit: Fit, group: GroupFit): readonly LackOfFit[] {
     const rows = points.map((point) => ({ ...point, place: recorded.index.indexOf(point.index) }));
     const missed = total(rows, ({ residual, place }) => spread.count[place]! * residual ** 2);
     const within = total(rows, ({ observed, place }) => {
-      const deviation = spread.deviation[place]! / (log ? observed : 1);
+      const deviation = spread.deviation[place]! / (scale.log ? observed : 1);
       return spread.count[place]! < 2 ? 0 : (spread.count[place]! - 1) * deviation ** 2;
     });
     const freedom = total(rows, ({ place }) => Math.max(0, spread.count[place]! - 1));
     if (!(within > 0)) return [];
     const ratio = missed / left / (within / freedom);
-    const probability = 1 - fCdf(ratio, left, freedom);
+    const probability = fUpperTail(ratio, left, freedom);
     const sentence = told(ratio, probability);
     return [{ state, ratio, degreesOfFreedom: [left, freedom] as const, probability, sentence }];
   });

@@ -1,7 +1,5 @@
-import { type Fit, type GroupFit, resampler } from "../../estimate/index.js";
+import { type Fit, type GroupFit, problemOf } from "../../estimate/index.js";
 import { quantile, type RandomStream } from "../../numeric/index.js";
-import { recordDrawer } from "../refit/record-drawer.js";
-import { refitter } from "../refit/refitter.js";
 
 /** How well one unknown is found again in records drawn from the fitted rule. */
 export interface RecoveredUnknown {
@@ -28,12 +26,6 @@ export interface Recovery {
   readonly parameters: readonly RecoveredUnknown[];
 }
 
-/** One record drawn and fitted: its estimates, and whether each one's interval holds the truth. */
-interface Refit {
-  readonly estimates: readonly number[];
-  readonly holds: readonly boolean[];
-}
-
 /**
  * Draws records from the fitted rule, fits each again, and tells bias and coverage of every unknown.
  *
@@ -41,7 +33,7 @@ interface Refit {
  * when the profile interval holds it.
  *
  * @param wanted - records to refit.
- * @returns undefined where the fit is neither one of least squares nor of both kinds of error.
+ * @returns undefined where no records can be drawn from the fit: censored values, weighted counts, groups together.
  */
 export function recovery(
   fit: Fit,
@@ -49,14 +41,20 @@ export function recovery(
   wanted: number,
   stream: RandomStream,
 ): Recovery | undefined {
-  const attempt = squaresAttempt(fit, group) ?? likelihoodAttempt(fit, group);
-  if (attempt === undefined) return undefined;
-  const found: Refit[] = [];
+  const { level, group: problemOfGroup } = problemOf(fit);
+  const again = problemOfGroup(group.group).refitter();
+  if (again?.draw === undefined) return undefined;
+  const { draw, minimise, covers, reported, at } = again;
+  const found: { readonly estimates: readonly number[]; readonly holds: readonly boolean[] }[] = [];
   let failed = 0;
   while (found.length < wanted && failed < wanted) {
-    const refit = attempt(stream);
-    if (refit === undefined) failed++;
-    else found.push(refit);
+    const refit = draw(stream) && minimise(at);
+    if (refit === undefined || refit.stop.kind === "failed") failed++;
+    else
+      found.push({
+        estimates: Array.from(refit.estimates, (value, i) => reported(i, value)),
+        holds: Array.from(at, (value, i) => covers(refit, i, value)),
+      });
   }
   const unknowns = group.estimates.map(({ name, value }, i) => {
     const held = found.filter(({ holds }) => holds[i]).length / found.length;
@@ -67,39 +65,7 @@ export function recovery(
       held,
     );
   });
-  return { resamples: found.length, failed, level: fit.options.level ?? 0.95, parameters: unknowns };
-}
-
-type Attempt = (stream: RandomStream) => Refit | undefined;
-
-function squaresAttempt(fit: Fit, group: GroupFit): Attempt | undefined {
-  const again = refitter(fit, group);
-  if (again === undefined) return undefined;
-  const { at } = again;
-  const draw = recordDrawer(fit, again, group.sigma);
-  const values = new Float64Array(again.recorded.length);
-  return (stream) => {
-    if (!draw(stream, values)) return undefined;
-    const { estimates, stop, sumOfSquares } = again.minimise(at);
-    if (stop.kind === "failed") return undefined;
-    const most = sumOfSquares * (1 + group.cut / (again.rows.count - at.length));
-    const held = (i: number): number => again.minimiseHeld(estimates, i, at[i]!).sumOfSquares;
-    return { estimates: Array.from(estimates), holds: Array.from(at, (_, i) => held(i) <= most) };
-  };
-}
-
-/** Fits of both kinds of error are drawn and searched by `estimate` itself. */
-function likelihoodAttempt(fit: Fit, group: GroupFit): Attempt | undefined {
-  if (group.filter === undefined) return undefined;
-  const { refit, reported, holdsTruth } = resampler(fit, group, "parametric", undefined);
-  return (stream) => {
-    const { estimates, stop } = refit(stream);
-    if (stop.kind === "failed" || holdsTruth === undefined) return undefined;
-    return {
-      estimates: Array.from(estimates, (value, i) => reported(i, value)),
-      holds: Array.from(estimates, (_, i) => holdsTruth(estimates, i)),
-    };
-  };
+  return { resamples: found.length, failed, level, parameters: unknowns };
 }
 
 function recovered(name: string, truth: number, found: Float64Array, coverage: number): RecoveredUnknown {

@@ -1,12 +1,13 @@
-import type { Fit, GroupFit } from "../../estimate/index.js";
-import { type Refitter, refitter } from "../refit/refitter.js";
+import { type Fit, type GroupFit, problemOf, type Refitter } from "../../estimate/index.js";
+import { labelAt } from "../../record/index.js";
 
 /** The estimates from part of the record. */
 export interface Window {
   readonly name: string;
-  /** First and last time used, in the period column's unit. */
+  /** First and last time used, in the period column's unit, and their periods in words. */
   readonly from: number;
   readonly to: number;
+  readonly periods: readonly [string, string];
   readonly count: number;
   readonly estimates: readonly {
     readonly name: string;
@@ -24,9 +25,11 @@ const shares = [0.2, 0.4];
  * fifths. A part with fewer values than unknowns + 3 is passed over.
  */
 export function windows(fit: Fit, group: GroupFit): readonly Window[] {
-  const again = refitter(fit, group);
-  if (again === undefined) return [];
-  const { time } = fit.observations.groups.find((each) => each.name === group.group)!;
+  const { refitter, recorded, beginning } = problemOf(fit).group(group.group);
+  const steps = !beginning().fromStart;
+  const again = refitter();
+  if (again?.minimisePart === undefined) return [];
+  const { time, axis, index } = recorded;
   const last = time.length - 1;
   const cut = (share: number): number => Math.round(share * time.length);
   const parts: readonly (readonly [string, number, number])[] = [
@@ -35,21 +38,31 @@ export function windows(fit: Fit, group: GroupFit): readonly Window[] {
     ...shares.map((share) => [`without the first ${100 * share}%`, cut(share), last] as const),
     ...shares.map((share) => [`without the last ${100 * share}%`, 0, last - cut(share)] as const),
   ];
+  const label = (row: number): string => labelAt(axis, index[row]!);
   const seen = new Set<string>();
   return parts.flatMap(([name, from, to]) => {
     if (seen.has(`${from} ${to}`)) return [];
     seen.add(`${from} ${to}`);
-    const [first, end] = comparedIn(again, from, to, fit.options.errors === "process");
+    const [first, end] = comparedIn(again, from, to, steps);
     if (end - first < again.at.length + 3) return [];
-    const found = again.minimiseWindow(again.at, first, end);
+    const found = again.minimisePart!(again.at, first, end);
     if (found.stop.kind === "failed") return [];
     const estimates = group.estimates.map((estimate, i) => {
-      const value = found.estimates[i]!;
+      const value = again.reported(i, found.estimates[i]!);
       const { standardError } = estimate;
       const shift = standardError === undefined ? undefined : (value - estimate.value) / standardError;
       return { name: estimate.name, value, shift };
     });
-    return [{ name, from: time[from]!, to: time[to]!, count: end - first, estimates }];
+    return [
+      {
+        name,
+        from: time[from]!,
+        to: time[to]!,
+        periods: [label(from), label(to)],
+        count: end - first,
+        estimates,
+      },
+    ];
   });
 }
 

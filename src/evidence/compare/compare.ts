@@ -1,9 +1,10 @@
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import { type RollingOrigin, rollingOrigin } from "../forecasts/rolling-origin.js";
 import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseOneFit, refuseUnlikeErrors, refuseUnlikeRecords, refuseUnlikeStarts } from "../refusals.js";
 import { type ComparisonRow, comparisonRows } from "./comparison-row.js";
 import { type ComparisonVerdict, comparisonVerdict } from "./comparison-verdict.js";
+import { fitLabels } from "./fit-labels.js";
 import { type LikelihoodRatio, likelihoodRatios } from "./likelihood-ratio.js";
 
 /** Options of `compare`. */
@@ -20,6 +21,7 @@ export interface CompareOptions {
 
 /** What one rival leads to. */
 export interface RivalDecision {
+  /** What the comparison calls the rival. */
   readonly rule: string;
   readonly decision: string;
 }
@@ -44,8 +46,8 @@ export interface Comparison {
  * other, and forecasts from earlier parts of the record against naive ones. Says which is supported, that they cannot be
  * told apart (AICc within 2), or that none is adequate.
  *
- * With groups the AICc of the groups are added, each group having its own parameters and sigma. Where the spreads
- * differ, fits on the log scale are brought to the record's own scale by the Jacobian, -sum ln(y). With `decide`, what
+ * A fit has one AICc, however many groups: separate ones, each with its own parameters and sigma, add theirs up. Where the
+ * scales differ, fits on the log scale are brought to the record's own scale by the Jacobian, -sum ln(y). With `decide`, what
  * every rule that stands leads to is told, and none is called best.
  *
  * @throws {ModelError} `too-few-fits` | `unlike-records` | `unlike-errors` | `unlike-starts` |
@@ -58,21 +60,22 @@ export function compare(fits: readonly Fit[], options: CompareOptions = {}): Com
   if (!first || fits.length < 2) throw refuseOneFit(fits.length);
   for (const other of fits.slice(1)) refuseUnlike(first, other);
   for (const fit of fits) refuseExact(fit);
-  const scalesDiffer = new Set(fits.map((fit) => fit.options.distribution ?? "normal")).size > 1;
-  const rows = comparisonRows(fits, scalesDiffer);
+  const scalesDiffer = new Set(fits.map((fit) => problemOf(fit).scale.log)).size > 1;
+  const labels = fitLabels(fits);
+  const rows = comparisonRows(fits, labels, scalesDiffer);
   const rolled = rollingOrigin(fits, planOf(first, options));
   const { verdict, standing, sentence } = comparisonVerdict(fits, rows, rolled);
   const decisions = decisionsOf(fits, standing, options.decide);
-  return Object.freeze({
+  return {
     kind: "comparison",
-    rows: Object.freeze(rows),
-    likelihoodRatios: Object.freeze(likelihoodRatios(fits)),
+    rows,
+    likelihoodRatios: likelihoodRatios(fits, labels),
     rollingOrigin: rolled,
     verdict,
-    decisions: Object.freeze(decisions),
+    decisions,
     sentence: [sentence, ...decisionText(verdict, decisions)].join(" "),
-    notes: Object.freeze(notesOf(fits, scalesDiffer, rolled)),
-  });
+    notes: notesOf(fits, scalesDiffer, rolled),
+  };
 }
 
 function planOf(
@@ -89,9 +92,13 @@ function planOf(
 }
 
 function refuseUnlike(first: Fit, other: Fit): void {
-  if (first.options.errors !== other.options.errors) throw refuseUnlikeErrors();
+  if (problemOf(first).errors !== problemOf(other).errors) throw refuseUnlikeErrors();
   const lags = first.rule.lags.length - other.rule.lags.length;
-  if (first.options.errors === "process" && lags !== 0 && first.groups[0]!.count !== other.groups[0]!.count)
+  if (
+    problemOf(first).errors === "process" &&
+    lags !== 0 &&
+    first.groups[0]!.count !== other.groups[0]!.count
+  )
     throw refuseUnlikeStarts(first.groups[0]!.count, other.groups[0]!.count);
   const same =
     first.groups.length === other.groups.length &&
@@ -102,7 +109,10 @@ function refuseUnlike(first: Fit, other: Fit): void {
         group.points.every((point, i) => point.observed === twin.points[i]!.observed)
       );
     });
-  if (!same) throw refuseUnlikeRecords(first.rule.text, other.rule.text);
+  if (!same) {
+    const [one, two] = fitLabels([first, other]);
+    throw refuseUnlikeRecords(one!, two!);
+  }
 }
 
 function decisionsOf(
@@ -124,11 +134,18 @@ function decisionText({ kind }: ComparisonVerdict, decisions: readonly RivalDeci
 }
 
 function notesOf(fits: readonly Fit[], scalesDiffer: boolean, rolled: RollingOrigin | undefined): string[] {
-  const notes = ["AICc counts sigma and uses RSS/n; lower is better."];
+  const problems = fits.map(problemOf);
+  const squares = problems.some(({ kind }) => kind === "least-squares");
+  const notes = [
+    `AICc counts every unknown${squares ? ", sigma too, and uses RSS/n" : ""}; lower is better.`,
+  ];
   if (scalesDiffer)
     notes.push("The fits stand on different scales: those on the log scale are brought back by -sum ln(y).");
-  if (fits.some((fit) => fit.groups.length > 1))
-    notes.push("AICc added over the groups, each with its own parameters and sigma.");
+  const several = fits.some((fit) => fit.groups.length > 1);
+  if (several && problems.some(({ groups }) => groups === "separate"))
+    notes.push("Groups fitted separately, each with its own parameters and sigma: their AICc add up.");
+  if (problems.some(({ groups }) => groups !== "separate"))
+    notes.push("Groups fitted together: one AICc for all of them.");
   if (rolled === undefined)
     notes.push(
       "The record is too short to be forecast from its own earlier parts, or the fits are not of least squares.",

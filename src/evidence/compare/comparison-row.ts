@@ -1,12 +1,14 @@
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, freeUnknowns, problemOf } from "../../estimate/index.js";
 
-/** One rival of a comparison. Sums run over the groups, each with its own parameters and sigma. */
+/** One rival of a comparison, all its groups together. */
 export interface ComparisonRow {
   /** Which of the fits given, from 0. */
   readonly place: number;
+  /** What the rival is called: its rule, and what else tells it from the others. */
   readonly rule: string;
   /** n: values compared, of all groups. */
   readonly count: number;
+  /** Free unknowns; those that groups share once, sigma of least squares not counted. */
   readonly parameters: number;
   readonly sumOfSquares: number;
   /** On the scale that the comparison states. */
@@ -23,16 +25,18 @@ export interface ComparisonRow {
   readonly undetermined: boolean;
 }
 
-type GroupFit = Fit["groups"][number];
-
 /**
  * The rivals by increasing AICc.
  *
  * @param ownScale - brings fits on the log scale back to the record's own by the Jacobian, -sum ln y.
  */
-export function comparisonRows(fits: readonly Fit[], ownScale: boolean): readonly ComparisonRow[] {
+export function comparisonRows(
+  fits: readonly Fit[],
+  labels: readonly string[],
+  ownScale: boolean,
+): readonly ComparisonRow[] {
   const raw = fits
-    .map((fit, place) => rowOf(fit, place, ownScale))
+    .map((fit, place) => ({ ...rowOf(fit, place, ownScale), rule: labels[place]! }))
     .sort((a, b) => a.aicCorrected - b.aicCorrected);
   const lowest = raw[0]!.aicCorrected;
   const weight = (row: { aicCorrected: number }): number => Math.exp((lowest - row.aicCorrected) / 2) || 0;
@@ -40,25 +44,30 @@ export function comparisonRows(fits: readonly Fit[], ownScale: boolean): readonl
   return raw.map((row) => ({ ...row, difference: row.aicCorrected - lowest, weight: weight(row) / total }));
 }
 
-function rowOf(fit: Fit, place: number, ownScale: boolean): Omit<ComparisonRow, "difference" | "weight"> {
-  const sum = (of: (group: GroupFit) => number): number =>
-    fit.groups.reduce((total, group) => total + of(group), 0);
-  const jacobian = ownScale && fit.options.distribution === "lognormal" ? sum(logOfValues) : 0;
-  const logLikelihood = sum((group) => group.criteria.logLikelihood) - jacobian;
+function rowOf(
+  fit: Fit,
+  place: number,
+  ownScale: boolean,
+): Omit<ComparisonRow, "rule" | "difference" | "weight"> {
+  const { criteria, groups } = fit;
+  const jacobian = ownScale && problemOf(fit).scale.log ? sumOfLogs(fit) : 0;
   return {
     place,
-    rule: fit.rule.text,
-    count: sum((group) => group.count),
-    parameters: sum((group) => group.estimates.length),
-    sumOfSquares: sum((group) => group.sumOfSquares),
-    logLikelihood,
-    aic: sum((group) => group.criteria.aic) + 2 * jacobian,
-    aicCorrected: sum((group) => group.criteria.aicCorrected) + 2 * jacobian,
-    bic: sum((group) => group.criteria.counted * Math.log(group.count)) - 2 * logLikelihood,
-    undetermined: fit.groups.some((group) => group.estimates.some((e) => e.standardError === undefined)),
+    count: criteria.count,
+    parameters: freeUnknowns(fit),
+    sumOfSquares: groups.reduce((sum, group) => sum + group.sumOfSquares, 0),
+    logLikelihood: criteria.logLikelihood - jacobian,
+    aic: criteria.aic + 2 * jacobian,
+    aicCorrected: criteria.aicCorrected + 2 * jacobian,
+    bic: criteria.bic + 2 * jacobian,
+    undetermined: groups.some((group) => group.estimates.some((e) => e.standardError === undefined)),
   };
 }
 
-function logOfValues(group: GroupFit): number {
-  return group.points.reduce((total, point) => total + Math.log(point.observed), 0);
+/** What brings a likelihood of logarithms to the record's own scale. */
+function sumOfLogs({ groups }: Fit): number {
+  return groups.reduce(
+    (sum, { points }) => points.reduce((all, { observed }) => all + Math.log(observed), sum),
+    0,
+  );
 }

@@ -8,7 +8,7 @@ import { naiveCriteria } from "./naive-criteria.js";
 /** What a comparison comes to. */
 export interface ComparisonVerdict {
   readonly kind: "supported" | "undecided" | "none-adequate";
-  /** The rule, or the rules not told apart; empty where none is adequate. */
+  /** The rule, or the rules not told apart, as the comparison calls them; empty where none is adequate. */
   readonly rules: readonly string[];
 }
 
@@ -46,7 +46,9 @@ export function comparisonVerdict(
 function failingOf(fit: Fit, row: ComparisonRow, rolled: RollingOrigin | undefined): string | undefined {
   const { own, naive } = naiveCriteria(fit);
   const best = naive.reduce((low, next) => (next.aicCorrected < low.aicCorrected ? next : low));
-  if (best.aicCorrected <= own)
+  // A rule that is the naive one, as "x[t+1] = m" is the mean level, is no worse than it.
+  const ahead = own.aicCorrected - best.aicCorrected;
+  if (ahead > 1e-6 || (ahead > -1e-6 && best.counted < own.counted))
     return `"${best.name}" explains the record as well as "${row.rule}" and needs fewer parameters`;
   const scores = rolled?.scores[row.place];
   const worse = rolled?.scores.find(

@@ -1,5 +1,5 @@
-import type { Fit } from "../../estimate/index.js";
-import { chiSquareCdf } from "../../numeric/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
+import { chiSquareUpperTail } from "../../numeric/index.js";
 import { nestingOf } from "./nesting.js";
 
 /** Whether parameters that a smaller rule leaves out are worth having. */
@@ -25,28 +25,48 @@ export interface LikelihoodRatio {
  * @see Wilks, S. S. (1938), Annals of Mathematical Statistics 9; on the edge Self, S. G. and Liang, K.-Y. (1987),
  *   Journal of the American Statistical Association 82.
  */
-export function likelihoodRatios(fits: readonly Fit[]): readonly LikelihoodRatio[] {
-  return fits.flatMap((smaller) =>
-    fits.flatMap((larger) => {
-      if (smaller === larger || smaller.options.distribution !== larger.options.distribution) return [];
-      const nesting = nestingOf(smaller, larger);
-      return nesting ? [ratioOf(smaller, larger, nesting.at)] : [];
+export function likelihoodRatios(
+  fits: readonly Fit[],
+  labels: readonly string[],
+): readonly LikelihoodRatio[] {
+  return fits.flatMap((smaller, s) =>
+    fits.flatMap((larger, l) => {
+      if (smaller === larger) return [];
+      const nesting = isCommonOf(smaller, larger)
+        ? { at: {} }
+        : areLike(smaller, larger) && nestingOf(smaller, larger);
+      return nesting ? [ratioOf(smaller, larger, [labels[s]!, labels[l]!], nesting.at)] : [];
     }),
   );
 }
 
-function ratioOf(smaller: Fit, larger: Fit, at: Readonly<Record<string, number>>): LikelihoodRatio {
-  const total = (fit: Fit): number =>
-    fit.groups.reduce((sum, group) => sum + group.criteria.logLikelihood, 0);
-  const statistic = Math.max(0, 2 * (total(larger) - total(smaller)));
-  const names = Object.keys(at);
-  const degreesOfFreedom = names.length * larger.groups.length;
-  const bounds = { ...larger.rule.bounds, ...larger.options.bounds };
-  const edge = names.filter((name) => bounds[name]?.includes(at[name]!));
-  const probability = edge.length > 0 ? undefined : 1 - chiSquareCdf(statistic, degreesOfFreedom);
+/** Whether two fits take groups and errors alike, so that only their rules differ. */
+function areLike(one: Fit, other: Fit): boolean {
+  const [a, b] = [problemOf(one), problemOf(other)];
+  return a.distribution === b.distribution && a.groups === b.groups;
+}
+
+/** Whether one fit has the same parameters for all groups, and the other the same rule with each group's own. */
+function isCommonOf(one: Fit, other: Fit): boolean {
+  const [a, b] = [problemOf(one), problemOf(other)];
+  const sameRule = one.rule.text === other.rule.text && a.distribution === b.distribution;
+  return sameRule && a.groups === "combined" && b.groups === "separate";
+}
+
+function ratioOf(
+  smaller: Fit,
+  larger: Fit,
+  names: readonly [string, string],
+  at: Readonly<Record<string, number>>,
+): LikelihoodRatio {
+  const statistic = Math.max(0, 2 * (larger.criteria.logLikelihood - smaller.criteria.logLikelihood));
+  const degreesOfFreedom = larger.criteria.counted - smaller.criteria.counted;
+  const { bounds } = problemOf(larger);
+  const edge = Object.keys(at).filter((name) => bounds(name).includes(at[name]!));
+  const probability = edge.length > 0 ? undefined : chiSquareUpperTail(statistic, degreesOfFreedom);
   const base = {
-    smaller: smaller.rule.text,
-    larger: larger.rule.text,
+    smaller: names[0],
+    larger: names[1],
     at,
     statistic,
     degreesOfFreedom,
@@ -59,7 +79,7 @@ function sentenceOf(ratio: Omit<LikelihoodRatio, "sentence">, edge: readonly str
   const where = Object.entries(ratio.at)
     .map(([name, value]) => `${name} = ${value}`)
     .join(", ");
-  const nested = `"${ratio.smaller}" is "${ratio.larger}" at ${where}`;
+  const nested = `"${ratio.smaller}" is "${ratio.larger}" ${where === "" ? "with the same parameters and sigma for all groups" : `at ${where}`}`;
   const numbers = `likelihood ratio ${ratio.statistic.toFixed(2)} on ${ratio.degreesOfFreedom}`;
   if (ratio.probability === undefined)
     return `${nested} (${numbers}); that lies on the edge of the range of ${edge.join(", ")}, so the chi-square distribution does not hold and no probability is given.`;

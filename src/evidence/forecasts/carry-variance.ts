@@ -1,5 +1,5 @@
-import type { Fit, GroupFit } from "../../estimate/index.js";
-import { compileRule } from "../../rule/index.js";
+import type { GroupFit, Scale } from "../../estimate/index.js";
+import { compileRule, type Rule } from "../../rule/index.js";
 
 /** Variance that the uncertainty of the parameters gives one cell of a path: g'Cg by its slopes g. */
 export function spreadOf(
@@ -24,11 +24,13 @@ export function spreadOf(
  * Variance that errors of single steps have built up after 1 to `periods` steps, on the fitting scale: P' = F P F' + Q
  * along the path, F the slopes of one step, Q the variance of one error.
  *
+ * @param sds - standard deviation of one error, by state.
  * @returns [periods][states].
  */
 export function carryVariance(
-  { rule, options }: Fit,
-  { sigma }: GroupFit,
+  rule: Rule,
+  { log }: Scale,
+  sds: readonly number[],
   start: Float64Array,
   parameters: Float64Array,
   inputs: readonly Float64Array[],
@@ -38,7 +40,6 @@ export function carryVariance(
   const { pathWithSensitivities } = compileRule(rule);
   const slots = start.length;
   const width = parameters.length + slots;
-  const log = options.distribution === "lognormal";
   const values = new Float64Array(2 * slots);
   const slopes = new Float64Array(2 * slots * width);
   let variance = new Float64Array(slots * slots);
@@ -50,7 +51,7 @@ export function carryVariance(
       slopes[(slots + row) * width + parameters.length + column]!;
     variance = sandwich(slope, variance, slots);
     for (let s = 0; s < rule.states.length; s++)
-      variance[s * slots + s] = variance[s * slots + s]! + (sigma * (log ? state[s]! : 1)) ** 2;
+      variance[s * slots + s] = variance[s * slots + s]! + (sds[s]! * (log ? state[s]! : 1)) ** 2;
     return Float64Array.from(rule.states, (_, s) => variance[s * slots + s]! / (log ? state[s]! ** 2 : 1));
   });
 }

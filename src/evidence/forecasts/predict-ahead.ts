@@ -1,5 +1,5 @@
-import { type Fit, type GroupFit, unknownsOf } from "../../estimate/index.js";
-import type { ObservedGroup } from "../../record/index.js";
+import { type Fit, type FittedScatter, type GroupFit, problemOf } from "../../estimate/index.js";
+import { inputByPeriod, type ObservedGroup } from "../../record/index.js";
 import { compileRule, type Rule } from "../../rule/index.js";
 import { carryVariance, spreadOf } from "./carry-variance.js";
 
@@ -10,52 +10,49 @@ export interface Prediction {
 }
 
 /**
- * Predicts every state over the periods after the fitted record, with the uncertainty of the parameters and the errors
- * of single values, both carried along the path by their slopes.
+ * Predicts every state over the periods after a row of the record, with the uncertainty of the parameters and the errors
+ * of single values, both carried along the trajectory by their slopes.
  *
  * @param whole - the group with all its rows, whose inputs are taken as known.
- * @returns [periods][states]; undefined where the fit is not one of least squares with errors of one kind, or the path
- *   leaves the range of numbers.
+ * @param origin - the last row whose value is known, at or after the last one that was fitted.
+ * @returns [periods][states]; undefined where the fit is not one of least squares with errors of one kind, or the
+ *   trajectory leaves the range of numbers.
  */
 export function predictAhead(
   fit: Fit,
   group: GroupFit,
   whole: ObservedGroup,
+  origin: number,
   periods: number,
 ): readonly (readonly Prediction[])[] | undefined {
-  const { rule, options } = fit;
-  const plain = [undefined, "normal", "lognormal"].includes(options.distribution as string | undefined);
-  if (options.errors === "both" || options.factor !== undefined || !plain) return undefined;
-  const trained = fit.observations.groups.find((each) => each.name === group.group)!;
-  const last = trained.index[trained.index.length - 1]!;
-  const unknowns = unknownsOf(rule, options);
+  const { rule } = fit;
+  const { scale, factors, group: problemOfGroup } = problemOf(fit);
+  const { kind, unknowns, beginning: beginningOf, noise } = problemOfGroup(group.group);
+  if (kind !== "least-squares" || Object.keys(factors).length > 0) return undefined;
+  const last = whole.index[origin]!;
   const parameters = Float64Array.from(rule.parameters, (name) => group.parameters[name]!);
-  const slots = rule.states.length + rule.lags.length;
-  const steps = options.errors === "process";
-  const longest = rule.lags.reduce((most, { lag }) => Math.max(most, lag), 0);
-  const start = steps ? lastValues(rule, trained) : unknowns.initial.slice();
+  const beginning = beginningOf();
+  const slots = beginning.initial.length;
+  const start = beginning.fromStart ? beginning.initial : valuesAt(rule, whole, last);
   if (start === undefined) return undefined;
-  group.estimates.forEach((estimate, i) => {
-    const slot = unknowns.columns[i]! - rule.parameters.length;
-    if (estimate.role === "initial") start[slot] = estimate.value;
-  });
-  const from = steps ? last : longest;
+  const from = beginning.fromStart ? beginning.period : last;
   const length = last + periods - from;
   const inputs = inputColumns(rule, whole, last + periods);
   const path = new Float64Array((length + 1) * slots);
   const slopes = new Float64Array(path.length * (rule.parameters.length + slots));
   compileRule(rule).pathWithSensitivities(start, parameters, inputs, from, length, path, slopes);
-  const noise = steps ? carryVariance(fit, group, start, parameters, inputs, from, periods) : undefined;
-  const log = options.distribution === "lognormal";
+  const carried = beginning.fromStart
+    ? undefined
+    : carryVariance(rule, scale, noise.change.map(sdOf), start, parameters, inputs, from, periods);
   const predicted = Array.from({ length: periods }, (_, h) =>
     rule.states.map((_, s) => {
       const cell = (length - periods + h + 1) * slots + s;
       const value = path[cell]!;
-      const scale = log ? value : 1;
+      const unit = scale.log ? value : 1;
       const ofParameters =
-        spreadOf(group, unknowns.columns, slopes, cell, parameters.length + slots) / scale ** 2;
-      const ofErrors = noise === undefined ? group.sigma ** 2 : noise[h]![s]!;
-      return { mean: log ? Math.log(value) : value, deviation: Math.sqrt(ofParameters + ofErrors) };
+        spreadOf(group, unknowns.columns, slopes, cell, parameters.length + slots) / unit ** 2;
+      const ofErrors = carried?.[h]?.[s] ?? sdOf(noise.reading[s]) ** 2;
+      return { mean: scale.to(value), deviation: Math.sqrt(ofParameters + ofErrors) };
     }),
   );
   const usable = predicted.every((row) =>
@@ -64,12 +61,15 @@ export function predictAhead(
   return usable ? predicted : undefined;
 }
 
-/** The state vector at the last row, past values included; undefined where one of them is not recorded. */
-function lastValues(rule: Rule, group: ObservedGroup): Float64Array | undefined {
-  const last = group.index[group.index.length - 1]!;
+/** The standard deviation of normal errors. */
+const sdOf = (noise: FittedScatter | undefined): number =>
+  noise !== undefined && "sd" in noise ? noise.sd : Number.NaN;
+
+/** The state vector at a period, past values included; undefined where one of them is not recorded. */
+function valuesAt(rule: Rule, group: ObservedGroup, period: number): Float64Array | undefined {
   const wanted = [...rule.states.map((state) => ({ state, lag: 0 })), ...rule.lags];
   const values = wanted.map(
-    ({ state, lag }) => group.values[state]![group.index.indexOf(last - lag)] ?? Number.NaN,
+    ({ state, lag }) => group.values[state]![group.index.indexOf(period - lag)] ?? Number.NaN,
   );
   return values.every(Number.isFinite) ? Float64Array.from(values) : undefined;
 }
@@ -78,9 +78,7 @@ function lastValues(rule: Rule, group: ObservedGroup): Float64Array | undefined 
 function inputColumns(rule: Rule, group: ObservedGroup, last: number): readonly Float64Array[] {
   return rule.inputs.map((name) => {
     const column = new Float64Array(last + 1).fill(Number.NaN);
-    group.index.forEach((period, row) => {
-      if (period <= last) column[period] = group.inputs[name]?.[row] ?? Number.NaN;
-    });
+    column.set(inputByPeriod(group, name).subarray(0, last + 1));
     return column;
   });
 }

@@ -1,4 +1,4 @@
-import { type Fit, fit as fitRule } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import { ModelError } from "../../numeric/index.js";
 import { type Prediction, predictAhead } from "./predict-ahead.js";
 import { recordUntil } from "./record-until.js";
@@ -7,9 +7,9 @@ import { recordUntil } from "./record-until.js";
 export function fitUntil(fit: Fit, name: string, origin: number): Fit | undefined {
   const group = fit.observations.groups.find((each) => each.name === name)!;
   try {
-    return fitRule(fit.rule, recordUntil(fit.observations, group, origin), {
-      ...fit.options,
-      start: { ...startOf(fit, name), ...fit.options.start },
+    return problemOf(fit).refit({
+      observations: recordUntil(fit.observations, group, origin),
+      start: startOf(fit, name),
       intervals: "none",
     });
   } catch (cause) {
@@ -41,6 +41,5 @@ export function predictFrom(
 ): readonly (readonly Prediction[])[] | undefined {
   const group = whole.observations.groups.find((each) => each.name === name)!;
   const periods = Math.min(horizon, group.index[group.index.length - 1]! - group.index[origin]!);
-  const known = { ...trained, observations: recordUntil(whole.observations, group, origin) };
-  return predictAhead(known, trained.groups[0]!, group, periods);
+  return predictAhead(trained, trained.groups[0]!, group, origin, periods);
 }

@@ -5,13 +5,22 @@ export function recordUntil(observations: Observations, group: ObservedGroup, la
   const end = last + 1;
   const byName = <T>(columns: Readonly<Record<string, T>>, cut: (column: T) => T): Record<string, T> =>
     Object.fromEntries(Object.entries(columns).map(([name, column]) => [name, cut(column)]));
+  const { withoutValue, ...rest } = group;
+  const kept = withoutValue?.index.filter((at) => at < group.index[last]!).length ?? 0;
   const cut: ObservedGroup = {
-    ...group,
+    ...rest,
     index: group.index.slice(0, end),
     time: group.time.slice(0, end),
     rows: group.rows.slice(0, end),
     values: byName(group.values, (column) => column.slice(0, end)),
     inputs: byName(group.inputs, (column) => column.slice(0, end)),
+    ...(withoutValue && {
+      withoutValue: {
+        index: withoutValue.index.slice(0, kept),
+        rows: withoutValue.rows.slice(0, kept),
+        inputs: byName(withoutValue.inputs, (column) => column.slice(0, kept)),
+      },
+    }),
     ...(group.labels && { labels: group.labels.slice(0, end) }),
     ...(group.weights && { weights: group.weights.slice(0, end) }),
     ...(group.censoring && { censoring: byName(group.censoring, (column) => column.slice(0, end)) }),

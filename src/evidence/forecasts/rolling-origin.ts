@@ -1,5 +1,6 @@
-import type { Fit } from "../../estimate/index.js";
+import { type Fit, problemOf } from "../../estimate/index.js";
 import type { ObservedGroup } from "../../record/index.js";
+import { fitLabels } from "../compare/fit-labels.js";
 import { type ForecastScores, type Scored, scoresOf } from "./forecast-scores.js";
 import { type NaiveForecast, naiveForecasts } from "./naive-forecasts.js";
 import type { Prediction } from "./predict-ahead.js";
@@ -45,7 +46,7 @@ interface Target {
 export function rollingOrigin(fits: readonly Fit[], plan: OriginPlan): RollingOrigin | undefined {
   const [first] = fits;
   if (first === undefined) return undefined;
-  const logs = fits.map((fit) => fit.options.distribution === "lognormal");
+  const logs = fits.map((fit) => problemOf(fit).scale.log);
   const naive = naiveForecasts(logs[0]!);
   const made = first.observations.groups.flatMap((group) => {
     const last = group.index.length - 1;
@@ -61,7 +62,7 @@ export function rollingOrigin(fits: readonly Fit[], plan: OriginPlan): RollingOr
   });
   const scored = made.flat();
   if (scored.length === 0) return undefined;
-  const names = [...fits.map((fit) => fit.rule.text), ...naive.map((each) => each.name)];
+  const names = [...fitLabels(fits), ...naive.map((each) => each.name)];
   const scores = names.map((name, i) =>
     scoresOf(
       name,

@@ -13,6 +13,7 @@ export interface Candidate {
 
 /** A catalogue rule that was left out, and why. */
 export interface NotTried {
+  /** In the catalogue: `rules[name]`. */
   readonly name: string;
   readonly reason: string;
 }

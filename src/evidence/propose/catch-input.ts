@@ -15,9 +15,12 @@ export function catchInput(record: Observations): CatchInput {
   const [only] = record.inputs;
   if (only === undefined || record.inputs.length > 1 || only === catchSymbol)
     return { record, takenFrom: undefined };
-  const groups = record.groups.map((group) => ({
+  const groups = record.groups.map(({ withoutValue, ...group }) => ({
     ...group,
     inputs: { [catchSymbol]: group.inputs[only]! },
+    ...(withoutValue && {
+      withoutValue: { ...withoutValue, inputs: { [catchSymbol]: withoutValue.inputs[only]! } },
+    }),
   }));
   return { record: { ...record, inputs: [catchSymbol], groups }, takenFrom: only };
 }

@@ -54,16 +54,17 @@ function adviceNote({ advice, errors }: Found): string[] {
 function sentenceOf({ rows, verdict, errors }: Found): string {
   if (verdict.kind === "none-adequate") {
     const [closest] = rows;
-    const reason = closest === undefined ? "" : ` The closest, ${closest.name}, is ${closest.reason}.`;
+    const reason = closest === undefined ? "" : ` The closest, ${closest.rule}, is ${closest.reason}.`;
     return `None adequate: no rule of the catalogue explains the record better than a forecast without a rule.${reason}`;
   }
   const supported = rows.filter((row) => row.supported);
   const open = openOf(supported);
   const kind = errors === "undecided" ? "the record does not tell where the error lies" : placeOf(errors);
+  const called = [...new Set(supported.map(({ rule }) => rule))];
   const told =
     verdict.kind === "supported"
-      ? `The record supports ${verdict.rules[0]}`
-      : `The record does not tell ${verdict.rules.slice(0, -1).join(", ")} and ${verdict.rules[verdict.rules.length - 1]} apart`;
+      ? `The record supports the rule ${called[0]}`
+      : `The record does not tell the rules ${called.slice(0, -1).join(", ")} and ${called[called.length - 1]} apart`;
   const next = verdict.kind === "supported" ? "Check it before it is used" : "Carry all of them forward";
   return `${told} (${kind}).${open} ${next}.`;
 }
@@ -74,7 +75,9 @@ function placeOf(errors: "process" | "observation"): string {
 
 function openOf(rows: readonly ProposedRule[]): string {
   const open = rows.filter((row) => row.undetermined.length > 0);
-  return open.map((row) => ` It does not determine ${row.undetermined.join(", ")} of ${row.name}.`).join("");
+  return open
+    .map((row) => ` It does not determine ${row.undetermined.join(", ")} of the rule ${row.rule}.`)
+    .join("");
 }
 
 function heldOutNote({ rows, naiveHeldOut }: Found, values: number | undefined): string[] {
@@ -83,6 +86,6 @@ function heldOutNote({ rows, naiveHeldOut }: Found, values: number | undefined):
   const best = scored.reduce((low, next) => (next.heldOut! < low.heldOut! ? next : low));
   const better = best.heldOut! < naiveHeldOut.score ? "better" : "no better";
   return [
-    `Held out: fitted without the last fifth, ${best.name} forecast its ${values} values with score ${best.heldOut!.toPrecision(3)}, ${better} than "${naiveHeldOut.name}" with ${naiveHeldOut.score.toPrecision(3)} (lower is better).`,
+    `Held out: fitted without the last fifth, ${best.rule} forecast its ${values} values with score ${best.heldOut!.toPrecision(3)}, ${better} than "${naiveHeldOut.name}" with ${naiveHeldOut.score.toPrecision(3)} (lower is better).`,
   ];
 }

@@ -1,6 +1,6 @@
-import type { Fit, FitOptions } from "../../estimate/index.js";
-import { fit as fitRule } from "../../estimate/index.js";
+import { type Fit, type FitOptions, problemOf } from "../../estimate/index.js";
 import type { Observations } from "../../record/index.js";
+import { ruleLabel } from "../../rule/index.js";
 import type { ErrorAdvice } from "../check/error-advice.js";
 import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseNothingFits } from "../refusals.js";
@@ -25,7 +25,9 @@ export interface ProposeOptions extends Omit<FitOptions, "errors" | "intervals">
 
 /** A rule that was tried on a record. */
 export interface ProposedRule {
+  /** In the catalogue: `rules[name]`. */
   readonly name: string;
+  /** What the rule is called. */
   readonly rule: string;
   readonly errors: "process" | "observation";
   readonly parameters: number;
@@ -53,6 +55,7 @@ export interface Proposal {
   readonly naiveHeldOut: { readonly name: string; readonly score: number } | undefined;
   readonly verdict: {
     readonly kind: "supported" | "undecided" | "none-adequate";
+    /** By their names in the catalogue. */
     readonly rules: readonly string[];
   };
   /** Fits of the supported rules, with intervals, ready for `check`, `compare` and `forecast`. */
@@ -84,8 +87,7 @@ export function propose(observations: Observations, options: ProposeOptions = {}
   const { candidates, left } = candidatesFor(record.inputs);
   const usable = candidates.filter((candidate) => positive || candidate.anyLevel);
   const kinds = errors === undefined ? (["process", "observation"] as const) : [errors];
-  const settings = { ...others, distribution };
-  const { tried, failed } = tryRules(usable, record, kinds, settings);
+  const { tried, failed } = tryRules(usable, record, kinds, { ...others, distribution });
   if (tried.length === 0) throw refuseNothingFits(failed[0]?.reason ?? "no rule suits its levels");
   for (const { fit } of tried) refuseExact(fit);
   const barred = candidates.filter((candidate) => !usable.includes(candidate));
@@ -94,20 +96,19 @@ export function propose(observations: Observations, options: ProposeOptions = {}
     ...failed,
     ...left,
   ];
-  return judged({ record, takenFrom, settings, tried, seed, errors, notTried });
+  return judged({ record, takenFrom, tried, seed, errors, notTried });
 }
 
 interface Trial {
   readonly record: Observations;
   readonly takenFrom: string | undefined;
-  readonly settings: Omit<FitOptions, "errors">;
   readonly tried: readonly Tried[];
   readonly notTried: readonly NotTried[];
   readonly errors: ProposeOptions["errors"];
   readonly seed: number;
 }
 
-function judged({ record, takenFrom, settings, tried, notTried, errors, seed }: Trial): Proposal {
+function judged({ record, takenFrom, tried, notTried, errors, seed }: Trial): Proposal {
   const advice = errors === undefined ? adviceOn(tried, seed) : undefined;
   const chosen = errors ?? advice?.kind ?? "undecided";
   const kinds = chosen === "undecided" ? (["process", "observation"] as const) : [chosen];
@@ -116,7 +117,7 @@ function judged({ record, takenFrom, settings, tried, notTried, errors, seed }: 
   const judgedRows = standings.map((standing, i) => rowOf(standing, held?.scores[i], held?.beatenBy[i]));
   const rows = judgedRows
     .sort((a, b) => Number(b.supported) - Number(a.supported) || a.difference - b.difference)
-    .map((row) => withFit(row, tried, record, settings));
+    .map((row) => withFit(row, tried));
   const names = [...new Set(rows.filter(({ row }) => row.supported).map(({ row }) => row.name))];
   const kind = names.length === 0 ? "none-adequate" : names.length === 1 ? "supported" : "undecided";
   const result = {
@@ -133,7 +134,7 @@ function judged({ record, takenFrom, settings, tried, notTried, errors, seed }: 
     .filter((input) => !told.some(({ fit }) => fit.rule.inputs.includes(input)))
     .map((input) => (input === catchSymbol ? (takenFrom ?? input) : input));
   const words = proposalWords(result, { tried: tried.length, heldOut: held?.values, takenFrom, unread });
-  return Object.freeze({ kind: "proposal", ...result, ...words });
+  return { kind: "proposal", ...result, ...words };
 }
 
 function rowOf(standing: Standing, heldOut: number | undefined, beatenBy: string | undefined): ProposedRule {
@@ -142,7 +143,7 @@ function rowOf(standing: Standing, heldOut: number | undefined, beatenBy: string
     beatenBy === undefined ? reason : `clearly worse than "${beatenBy}" on the last fifth, held out`;
   return {
     name: tried.name,
-    rule: tried.fit.rule.text,
+    rule: ruleLabel(tried.fit.rule),
     errors: tried.errors,
     parameters: tried.unknowns,
     aicCorrected: tried.aicCorrected,
@@ -158,13 +159,10 @@ function rowOf(standing: Standing, heldOut: number | undefined, beatenBy: string
 function withFit(
   row: ProposedRule,
   tried: readonly Tried[],
-  record: Observations,
-  settings: Omit<FitOptions, "errors">,
 ): { readonly row: ProposedRule; readonly fit?: Fit } {
   const { fit } = tried.find((each) => each.name === row.name && each.errors === row.errors)!;
   if (!row.supported) return { row };
-  const bounds = fit.options.bounds ?? {};
-  const whole = fitRule(fit.rule, record, { ...settings, bounds, errors: row.errors });
+  const whole = problemOf(fit).refit({ intervals: "profile" });
   const open = whole.groups.flatMap((group) =>
     group.estimates
       .filter((estimate) => estimate.standardError === undefined)

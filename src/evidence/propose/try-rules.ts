@@ -1,4 +1,4 @@
-import { type Fit, type FitOptions, fit as fitRule } from "../../estimate/index.js";
+import { type Fit, type FitOptions, fit as fitRule, freeUnknowns } from "../../estimate/index.js";
 import { ModelError } from "../../numeric/index.js";
 import type { Observations } from "../../record/index.js";
 import { type NaiveCriterion, naiveCriteria } from "../compare/naive-criteria.js";
@@ -54,16 +54,14 @@ function fitOrReason(attempt: () => Fit): Fit | string {
 }
 
 function described(name: string, errors: Tried["errors"], fit: Fit): Tried {
-  const sum = (of: (group: Fit["groups"][number]) => number): number =>
-    fit.groups.reduce((total, group) => total + of(group), 0);
   const { own, naive } = naiveCriteria(fit, firstShared);
   return {
     name,
     errors,
     fit,
-    unknowns: sum((group) => group.estimates.length),
-    logLikelihood: sum((group) => group.criteria.logLikelihood),
-    aicCorrected: own,
+    unknowns: freeUnknowns(fit),
+    logLikelihood: fit.criteria.logLikelihood,
+    aicCorrected: own.aicCorrected,
     naive,
   };
 }

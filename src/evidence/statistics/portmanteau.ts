@@ -1,4 +1,4 @@
-import { chiSquareCdf } from "../../numeric/index.js";
+import { chiSquareUpperTail } from "../../numeric/index.js";
 import { autocorrelations } from "./autocorrelation.js";
 
 /** A test statistic, its degrees of freedom, and the probability of one as large under the hypothesis. */
@@ -40,5 +40,5 @@ function portmanteau(
     0,
   );
   const degreesOfFreedom = Math.max(1, lags - fitted);
-  return { statistic, degreesOfFreedom, probability: 1 - chiSquareCdf(statistic, degreesOfFreedom) };
+  return { statistic, degreesOfFreedom, probability: chiSquareUpperTail(statistic, degreesOfFreedom) };
 }

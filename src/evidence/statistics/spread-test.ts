@@ -1,4 +1,4 @@
-import { chiSquareCdf } from "../../numeric/index.js";
+import { chiSquareUpperTail } from "../../numeric/index.js";
 import type { ChiSquareTest } from "./portmanteau.js";
 
 /** Whether scatter changes with the level: the test, and which way. */
@@ -20,7 +20,7 @@ export function spreadTest(residuals: readonly number[], fitted: readonly number
     fitted,
   );
   const statistic = residuals.length * correlation ** 2;
-  return { statistic, degreesOfFreedom: 1, probability: 1 - chiSquareCdf(statistic, 1), correlation };
+  return { statistic, degreesOfFreedom: 1, probability: chiSquareUpperTail(statistic, 1), correlation };
 }
 
 /** 0 where one side does not vary. */

@@ -1,3 +1,5 @@
+import { makeReflector, reflect } from "./reflection.js";
+
 /** R with its columns at length 1 and in an order in which the diagonal falls. */
 export interface PivotedTriangle {
   /** Row-major [size, size]. */
@@ -14,59 +16,36 @@ export interface PivotedTriangle {
  * @see Golub and Van Loan, Matrix Computations, 4th ed., algorithm 5.4.1.
  */
 export function pivotedTriangle(triangle: Float64Array, size: number): PivotedTriangle {
-  const columns = new Float64Array(size * size);
-  const lengths = new Float64Array(size);
-  for (let j = 0; j < size; j++) {
-    let sum = 0;
-    for (let i = 0; i <= j; i++) sum += triangle[i * size + j]! ** 2;
-    lengths[j] = Math.sqrt(sum);
-    for (let i = 0; i <= j; i++) columns[j * size + i] = triangle[i * size + j]! / (lengths[j]! || 1);
-  }
-  const order = Int32Array.from({ length: size }, (_, j) => j);
-  for (let k = 0; k < size; k++) {
-    bringLongestForward(columns, order, k, size);
-    reflect(columns, k, size);
-  }
+  const columns = Array.from({ length: size }, (_, j) =>
+    Float64Array.from({ length: size }, (_entry, i) => (i <= j ? triangle[i * size + j]! : 0)),
+  );
+  const lengths = Float64Array.from(columns, (column) => tail(column, 0));
+  columns.forEach((column, j) => {
+    for (let i = 0; i < size; i++) column[i] = column[i]! / (lengths[j]! || 1);
+  });
+  const order = Int32Array.from(columns.keys());
   const pivoted = new Float64Array(size * size);
-  for (let j = 0; j < size; j++) for (let i = 0; i <= j; i++) pivoted[i * size + j] = columns[j * size + i]!;
+  for (let k = 0; k < size; k++) {
+    bringLongestForward(columns, order, k);
+    const column = columns[k]!;
+    for (let i = 0; i < k; i++) pivoted[i * size + k] = column[i]!;
+    const head = makeReflector(column, k);
+    pivoted[k * size + k] = head;
+    if (head !== 0) for (let j = k + 1; j < size; j++) reflect(column, head, k, columns[j]!);
+  }
   return { pivoted, order, lengths };
 }
 
-function bringLongestForward(columns: Float64Array, order: Int32Array, k: number, size: number): void {
+function bringLongestForward(columns: Float64Array[], order: Int32Array, k: number): void {
   let best = k;
-  for (let j = k + 1; j < size; j++) if (tail(columns, j, k, size) > tail(columns, best, k, size)) best = j;
-  if (best === k) return;
-  for (let i = 0; i < size; i++) {
-    const kept = columns[k * size + i]!;
-    columns[k * size + i] = columns[best * size + i]!;
-    columns[best * size + i] = kept;
-  }
-  const kept = order[k]!;
-  order[k] = order[best]!;
-  order[best] = kept;
+  for (let j = k + 1; j < columns.length; j++) if (tail(columns[j]!, k) > tail(columns[best]!, k)) best = j;
+  [columns[k], columns[best]] = [columns[best]!, columns[k]!];
+  [order[k], order[best]] = [order[best]!, order[k]!];
 }
 
-function tail(columns: Float64Array, j: number, from: number, size: number): number {
+/** Length of a column from place `from` on. */
+function tail(column: Float64Array, from: number): number {
   let sum = 0;
-  for (let i = from; i < size; i++) sum += columns[j * size + i]! ** 2;
-  return sum;
-}
-
-function reflect(columns: Float64Array, k: number, size: number): void {
-  const length = Math.sqrt(tail(columns, k, k, size));
-  if (length === 0) return;
-  const head = columns[k * size + k]!;
-  const turned = head > 0 ? -length : length;
-  const lead = head - turned;
-  const factor = -1 / (turned * lead);
-  for (let j = k + 1; j < size; j++) {
-    let dot = lead * columns[j * size + k]!;
-    for (let i = k + 1; i < size; i++) dot += columns[k * size + i]! * columns[j * size + i]!;
-    dot *= factor;
-    columns[j * size + k] = columns[j * size + k]! - dot * lead;
-    for (let i = k + 1; i < size; i++) {
-      columns[j * size + i] = columns[j * size + i]! - dot * columns[k * size + i]!;
-    }
-  }
-  columns[k * size + k] = turned;
+  for (let i = from; i < column.length; i++) sum += column[i]! ** 2;
+  return Math.sqrt(sum);
 }

@@ -1,4 +1,5 @@
 import { covarianceFromTriangle } from "../algebra/covariance-from-triangle.js";
+import { freezeDeep } from "../freeze-deep.js";
 import { badBounds, badStart, otherNumberOf, tooFewResiduals } from "../refusals.js";
 import type { StopReason } from "../search/stop-reason.js";
 import { type Minimum, minimiseSquares } from "./minimise-squares.js";
@@ -11,7 +12,7 @@ export interface LeastSquaresProblem {
   /** Derivative of every residual by every parameter, row-major [rows, size]; by differences when absent. */
   readonly jacobian?: (parameters: Float64Array) => ArrayLike<number>;
   readonly start: ArrayLike<number>;
-  /** Lowest and highest admitted values; open when absent. */
+  /** Lowest and highest admitted values; open when absent. A parameter with equal bounds is held there. */
   readonly lower?: ArrayLike<number>;
   readonly upper?: ArrayLike<number>;
   /** Typical size of each parameter, for difference steps about 0; by default its own value tells. */
@@ -28,7 +29,7 @@ export interface LeastSquaresSolution {
   readonly covariance: Float64Array;
   readonly residuals: Float64Array;
   readonly sumOfSquares: number;
-  /** sumOfSquares / (rows - size); undefined when no residual is left over. */
+  /** sumOfSquares / (rows - parameters not held); undefined when no residual is left over. */
   readonly variance: number | undefined;
   /** Number of parameters, or combinations of them, that the residuals determine at the solution. */
   readonly rank: number;
@@ -73,7 +74,8 @@ export function leastSquares(problem: LeastSquaresProblem): LeastSquaresSolution
   if (rows < size) throw tooFewResiduals(rows, size);
   const { residuals, jacobian } = problem;
   const system = residualSystem({ residuals, jacobian, rows, lower, upper, scale });
-  return solution(system, lowest(system, start, lower, upper));
+  const held = lower.filter((bound, j) => bound === upper[j]).length;
+  return solution(system, lowest(system, start, lower, upper), rows - size + held);
 }
 
 function optional(
@@ -101,14 +103,13 @@ function lowest(
   return minimiseSquares(system, best.estimates, { ...bounded, reach: 1 });
 }
 
-function solution(system: ResidualSystem, found: Minimum): LeastSquaresSolution {
+function solution(system: ResidualSystem, found: Minimum, left: number): LeastSquaresSolution {
   const { size, triangle } = system;
   system.evaluate(found.estimates);
-  const left = system.residuals.length - size;
   const variance = left > 0 ? found.sumOfSquares / left : undefined;
   const { covariance, determined, rank } = covarianceFromTriangle(triangle, size);
   for (let i = 0; i < covariance.length; i++) covariance[i] = covariance[i]! * (variance ?? Number.NaN);
-  return Object.freeze({
+  return freezeDeep({
     kind: "least-squares",
     estimates: found.estimates,
     standardErrors: determined.map((known, i) =>

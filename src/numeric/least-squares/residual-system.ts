@@ -51,6 +51,9 @@ export function residualSystem(problem: ResidualProblem): ResidualSystem {
   };
   const differences: DifferenceProblem = { sample, rows, lower: problem.lower, upper: problem.upper };
 
+  /** Equal bounds hold a parameter: what it would do is not asked. */
+  const isHeld = (j: number): boolean => problem.lower[j] === problem.upper[j];
+
   const difference = (parameters: Float64Array, j: number, column: Float64Array): boolean => {
     const step = Math.max(shares[j]! * Math.abs(parameters[j]!), least[j]!);
     return (
@@ -71,7 +74,8 @@ export function residualSystem(problem: ResidualProblem): ResidualSystem {
     },
     linearise(parameters) {
       if (problem.jacobian !== undefined) copyColumns(problem.jacobian(parameters.slice()), columns, rows);
-      else if (!columns.every((column, j) => difference(parameters, j, column))) return false;
+      else if (!columns.every((column, j) => isHeld(j) || difference(parameters, j, column))) return false;
+      for (let j = 0; j < size; j++) if (isHeld(j)) columns[j]!.fill(0);
       carried.set(residuals);
       return triangularise(columns, carried, triangle, projected);
     },

@@ -35,19 +35,30 @@ export function advance(state: Int32Array): void {
   state[7] = (dHigh << 13) | (dLow >>> 19);
 }
 
-/** The state that SplitMix64 makes of a seed of up to 53 bits. */
-export function seededState(seed: number): Int32Array {
-  const state = new Int32Array(10);
+/**
+ * Four 64-bit words from a seed of up to 53 bits: the state of a generator.
+ *
+ * @see Steele, Lea and Flood (2014), Fast splittable pseudorandom number generators, OOPSLA: SplitMix64.
+ */
+export function seededWords(seed: number): BigUint64Array {
+  const words = new BigUint64Array(4);
   let counter = BigInt(seed);
   for (let i = 0; i < 4; i++) {
     counter = BigInt.asUintN(64, counter + 0x9e3779b97f4a7c15n);
-    let word = counter;
-    word = BigInt.asUintN(64, (word ^ (word >> 30n)) * 0xbf58476d1ce4e5b9n);
+    let word = BigInt.asUintN(64, (counter ^ (counter >> 30n)) * 0xbf58476d1ce4e5b9n);
     word = BigInt.asUintN(64, (word ^ (word >> 27n)) * 0x94d049bb133111ebn);
-    word ^= word >> 31n;
+    words[i] = word ^ (word >> 31n);
+  }
+  return words;
+}
+
+/** The state, as `advance` takes it, that follows from a seed. */
+export function seededState(seed: number): Int32Array {
+  const state = new Int32Array(10);
+  seededWords(seed).forEach((word, i) => {
     state[2 * i] = Number(BigInt.asIntN(32, word >> 32n));
     state[2 * i + 1] = Number(BigInt.asIntN(32, word));
-  }
+  });
   return state;
 }
 

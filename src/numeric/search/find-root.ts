@@ -35,7 +35,7 @@ export function findRoot(
     last: to - from,
     before: to - from,
   };
-  if (!(bracket.fa * bracket.fb <= 0) && !(Math.sign(bracket.fa) === -Math.sign(bracket.fb))) {
+  if (!(Math.sign(bracket.fa) * Math.sign(bracket.fb) <= 0)) {
     throw noSignChange(from, to, bracket.fa, bracket.fb);
   }
   bracket.fc = bracket.fa;

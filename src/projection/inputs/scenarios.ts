@@ -1,5 +1,5 @@
+import type { InputPlans } from "../../dynamics/index.js";
 import { refuseNoScenario, refuseTwoPlans } from "../refusals.js";
-import type { InputPlans } from "./input-plan.js";
 
 /** Plans of inputs by the scenario's name, in the order in which they are shown. */
 export type Scenarios = Readonly<Record<string, InputPlans>>;

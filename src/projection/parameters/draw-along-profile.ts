@@ -1,5 +1,5 @@
-import { type Estimate, type Fit, fit as fitRule, type GroupFit } from "../../estimate/index.js";
-import { choleskyFactor, studentQuantile } from "../../numeric/index.js";
+import { type Estimate, type Fit, type GroupFit, type Held, problemOf } from "../../estimate/index.js";
+import { studentQuantile } from "../../numeric/index.js";
 import { drawnSpread, type ParametersDraw } from "./draw-parameters.js";
 
 /** Fits with the loose unknown held, on each side of its estimate. */
@@ -30,7 +30,7 @@ interface Rung {
  */
 export function drawAlongProfile(fit: Fit, group: GroupFit, loose: Estimate): ParametersDraw | undefined {
   const place = group.estimates.indexOf(loose);
-  const rungs = ladder(fit, group, loose, place);
+  const rungs = rungsOf(fit, group, loose);
   if (rungs.length < 2) return undefined;
   const size = group.estimates.length;
   const normals = new Float64Array(size - 1);
@@ -38,7 +38,11 @@ export function drawAlongProfile(fit: Fit, group: GroupFit, loose: Estimate): Pa
     const root = studentQuantile(stream.uniform(), group.degreesOfFreedom);
     const { low, high, share } = around(rungs, root);
     const { factor } = share < 0.5 ? low : high;
-    for (let i = 0; i < size - 1; i++) normals[i] = stream.normal();
+    let distance = root * root;
+    for (let i = 0; i < size - 1; i++) {
+      normals[i] = stream.normal();
+      distance += normals[i]! * normals[i]!;
+    }
     let row = 0;
     for (let i = 0; i < size; i++) {
       out[i] = low.centre[i]! + share * (high.centre[i]! - low.centre[i]!);
@@ -46,7 +50,7 @@ export function drawAlongProfile(fit: Fit, group: GroupFit, loose: Estimate): Pa
       for (let k = 0; k <= row; k++) out[i] = out[i]! + factor[row * (size - 1) + k]! * normals[k]!;
       row++;
     }
-    return drawnSpread(group.degreesOfFreedom, stream);
+    return { sigma: drawnSpread(group.degreesOfFreedom, stream), distance };
   };
 }
 
@@ -60,18 +64,49 @@ export function loosest(group: GroupFit): Estimate | undefined {
       profile.upper === undefined ? (trace[trace.length - 1]?.increase ?? 0) : Number.POSITIVE_INFINITY,
     );
   const open = group.estimates.filter(
-    (estimate) => estimate.trace.length > 1 && Number.isFinite(rise(estimate)),
+    (estimate) => estimate.role !== "scale" && estimate.trace.length > 1 && Number.isFinite(rise(estimate)),
   );
   return open.sort((a, b) => rise(a) - rise(b))[0];
 }
 
-/** Rungs by increasing root, kept where the root rises with the value. */
-function ladder(fit: Fit, group: GroupFit, loose: Estimate, place: number): readonly Rung[] {
-  const down = sideValues(loose, -1).reverse();
-  const rungs = [...down, loose.value, ...sideValues(loose, 1)].flatMap((value) => {
-    const rung = rungAt(fit, group, loose, place, value);
-    return rung === undefined ? [] : [rung];
-  });
+/** A profile with one side of its interval longer than the other by less than this passes for a parabola. */
+const asParabola = 1.25;
+
+/**
+ * The unknown whose profile is furthest from a parabola: around the estimates its draws, and those of what depends on
+ * it, would stray from what the record allows.
+ */
+export function mostBent(group: GroupFit): Estimate | undefined {
+  const bend = ({ value, profile: { lower, upper } }: Estimate): number => {
+    if (lower === undefined || upper === undefined) return 1;
+    const ratio = (upper - value) / (value - lower);
+    return Math.max(ratio, 1 / ratio);
+  };
+  const known = group.estimates.filter(
+    (estimate) => estimate.role !== "scale" && estimate.trace.length > 1 && bend(estimate) > asParabola,
+  );
+  const [first] = known.sort((a, b) => bend(b) - bend(a));
+  return known.find(({ role }) => role === "parameter") ?? first;
+}
+
+/** Rungs by increasing root, kept where the root rises with the value; each begins where its neighbour ended. */
+function rungsOf(fit: Fit, group: GroupFit, loose: Estimate): readonly Rung[] {
+  const { hold } = problemOf(fit).group(group.group);
+  const side = (values: readonly number[]): Rung[] => {
+    let last: Held | undefined;
+    return values.flatMap((value) => {
+      const held = hold(loose.name, value, last);
+      if (held?.factor === undefined || !Number.isFinite(held.increase)) return [];
+      last = held;
+      const root = Math.sign(value - loose.value) * Math.sqrt(held.increase);
+      return [{ root, centre: held.estimates, factor: held.factor }];
+    });
+  };
+  const rungs = [
+    ...side(sideValues(loose, -1)).reverse(),
+    ...side([loose.value]),
+    ...side(sideValues(loose, 1)),
+  ];
   const kept: Rung[] = [];
   for (const rung of rungs) if (kept.every((before) => before.root < rung.root)) kept.push(rung);
   return kept;
@@ -90,58 +125,6 @@ function sideValues(loose: Estimate, direction: 1 | -1): number[] {
   const first = Math.min(...beyond, Math.abs(end - value)) / 8;
   const growth = Math.max(1, Math.abs(end - value) / first) ** (1 / rungsASide);
   return Array.from({ length: rungsASide }, (_, k) => value + direction * first * growth ** (k + 1));
-}
-
-function rungAt(fit: Fit, group: GroupFit, loose: Estimate, place: number, value: number): Rung | undefined {
-  const held = heldFit(fit, group, loose, value);
-  if (held === undefined) return undefined;
-  const factor = choleskyFactor(Float64Array.from(held.covariance), held.estimates.length);
-  const rise = riseOf(fit, group, held);
-  const centre = held.estimates.map((estimate) => estimate.value);
-  centre.splice(place, 0, value);
-  if (factor === undefined || !Number.isFinite(rise)) return undefined;
-  return {
-    root: Math.sign(value - loose.value) * Math.sqrt(rise),
-    centre: Float64Array.from(centre),
-    factor,
-  };
-}
-
-/** The profile's increase, in units of sigma^2 for least squares and of twice the log likelihood otherwise. */
-function riseOf({ options }: Fit, group: GroupFit, held: GroupFit): number {
-  const squares =
-    options.errors !== "both" && ["normal", "lognormal"].includes(`${options.distribution ?? "normal"}`);
-  return squares
-    ? Math.max(0, held.sumOfSquares - group.sumOfSquares) / group.sigma ** 2
-    : Math.max(0, 2 * (group.criteria.logLikelihood - held.criteria.logLikelihood));
-}
-
-function heldFit(fit: Fit, group: GroupFit, loose: Estimate, value: number): GroupFit | undefined {
-  const { rule, observations, options } = fit;
-  const limits = options.bounds?.[loose.name] ?? rule.bounds[loose.name];
-  if (limits !== undefined && (value < limits[0] || value > limits[1])) return undefined;
-  const own = { ...observations, groups: observations.groups.filter((each) => each.name === group.group) };
-  const state = loose.name.replace("[0]", "");
-  const given = { ...rule.fixed, ...options.fixed };
-  const start = Object.entries(group.parameters).filter(
-    ([name]) => name !== loose.name && given[name] === undefined,
-  );
-  const asked =
-    loose.role === "parameter"
-      ? { fixed: { ...options.fixed, [loose.name]: value } }
-      : { initial: { ...options.initial, [state]: value } };
-  try {
-    return fitRule(rule, own, {
-      ...options,
-      ...asked,
-      start: Object.fromEntries(start),
-      intervals: "none",
-    }).groups[0];
-  } catch (error) {
-    // A value at which the rule cannot be run is simply no rung; anything else is a fault and goes on.
-    if ((error as Error).name === "ModelError") return undefined;
-    throw error;
-  }
 }
 
 /** The rungs on both sides of a root, and how far it lies from the lower to the upper. */

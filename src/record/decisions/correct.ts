@@ -1,4 +1,4 @@
-import { type ColumnTable, columnNamed, rowCount } from "../column-table.js";
+import { type ColumnTable, columnNamed, rowCount, withPlainNames } from "../column-table.js";
 import type { Decision } from "./decision.js";
 import { noDecision, noSuchRow, reasonMissing } from "./refusals.js";
 
@@ -28,8 +28,8 @@ export function correct(table: ColumnTable, correction: Correction): ColumnTable
   if (!Number.isInteger(row) || row < 1 || row > rowCount(table)) throw noSuchRow(row, rowCount(table));
   if (typeof why !== "string" || why.trim() === "") throw reasonMissing(row, column);
   const cells = column === "" ? undefined : columnNamed(decided(table), column, "the column to correct");
-  const decision: Decision = Object.freeze({ row, column, was: cells?.[row - 1] ?? null, now, why, who });
-  return { ...table, decisions: Object.freeze([...(table.decisions ?? []), decision]) };
+  const decision: Decision = { row, column, was: cells?.[row - 1] ?? null, now, why, who };
+  return { ...table, decisions: [...(table.decisions ?? []), decision] };
 }
 
 /**
@@ -42,11 +42,12 @@ export function undo(table: ColumnTable, row?: number): ColumnTable {
   const at = decisions.map((decision) => row === undefined || decision.row === row).lastIndexOf(true);
   if (at < 0) throw noDecision(row);
   const left = decisions.filter((_, i) => i !== at);
-  return left.length === 0 ? rest : { ...rest, decisions: Object.freeze(left) };
+  return left.length === 0 ? rest : { ...rest, decisions: left };
 }
 
-/** The columns as they are used: with every correction of a cell put in. */
-export function decided(table: ColumnTable): ColumnTable {
+/** The columns as they are used: with plain names, and with every correction of a cell put in. */
+export function decided(record: ColumnTable): ColumnTable {
+  const table = withPlainNames(record);
   const changes = (table.decisions ?? []).filter(({ column }) => column !== "");
   if (changes.length === 0) return table;
   const columns = [...table.columns];

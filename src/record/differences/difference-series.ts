@@ -1,11 +1,14 @@
 import type { Warning } from "../../numeric/index.js";
 import type { ObservedGroup, ObservedState } from "../observations.js";
+import type { PeriodAxis } from "../period/period-axis.js";
 import { noLogarithm } from "./refusals.js";
 
 /** The pairs of one state of one series. All arrays have one entry a pair, in order of the later row. */
 export interface DifferenceSeries {
   readonly group: string;
   readonly state: string;
+  /** The axis of the series: `labelAt(axis, index)` names the period of an earlier row. */
+  readonly axis: PeriodAxis;
   /** Step index of the earlier row; the later one lies `steps` after it. */
   readonly index: Int32Array;
   readonly steps: Int32Array;
@@ -57,9 +60,10 @@ export function differenceSeries(
   const change = next.map((value, i) => value - present[i]!);
   const perHead = change.map((value, i) => (present[i] === 0 ? Number.NaN : value / present[i]!));
   warnZero(group, state, pairs, present, warnings);
-  return Object.freeze({
+  return {
     group: group.name,
     state: state.name,
+    axis: group.axis,
     index: Int32Array.from(pairs.earlier, (i) => group.index[i]!),
     steps: Int32Array.from(pairs.later, (i, n) => group.index[i]! - group.index[pairs.earlier[n]!]!),
     rows: Int32Array.from(pairs.later, (i) => group.rows[i]!),
@@ -69,7 +73,7 @@ export function differenceSeries(
     ratio: next.map((value, i) => (present[i] === 0 ? Number.NaN : value / present[i]!)),
     perHead,
     difference: asked(plan, pairs, scaled, combined, perHead),
-  });
+  };
 }
 
 function asked(

@@ -60,13 +60,13 @@ export function differences(observations: Observations, options: DifferenceOptio
     observations.states.map((state) => differenceSeries(group, state, plan, warnings)),
   );
   if (series.every(({ index }) => index.length === 0)) throw noPairs(plan, observations.groups);
-  return Object.freeze({
+  return {
     kind: "differences",
     observations,
     ...plan,
-    series: Object.freeze(series),
-    warnings: Object.freeze(warnings),
-  });
+    series,
+    warnings,
+  };
 }
 
 function positiveWhole(option: string, value: number): void {

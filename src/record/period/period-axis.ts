@@ -1,130 +1,146 @@
-import { type Column, type ColumnTable, columnNamed, isEmpty } from "../column-table.js";
-import { numberColumn } from "../number-column.js";
 import type { StepLength } from "../observations.js";
-import { optionWrong } from "../refusals.js";
-import { type Calendar, type CalendarName, calendarNamed, calendarNames, everyUnit } from "./calendar.js";
-import { type Moment, momentOf } from "./calendar-date.js";
-import { ambiguousDate, noPeriod, noSuchPeriod, stepMissing } from "./refusals.js";
-import { suggestedStep } from "./suggested-step.js";
+import { type CalendarName, noShift, periodOfMonths, shiftOf } from "./calendar.js";
+import { clampedDate, type Moment, mondayBefore } from "./moment.js";
+import { momentText, monthText, type PeriodForm, type PeriodText, periodText } from "./period-text.js";
 
-/** Where the rows of a record lie on its axis of periods. */
+/**
+ * The axis that the periods of a record lie on: which label a period has, and which period a label names.
+ *
+ * Plain data, so that every result that carries it can be sent to a worker, cloned and written as JSON; what it
+ * answers are the functions beside it. Periods are counted from 0 at the origin, the first row of the record or
+ * of the series that the axis belongs to.
+ */
 export interface PeriodAxis {
+  readonly kind: "period-axis";
   /** The period column, or "year, week" for a pair. */
   readonly column: string;
-  readonly calendar: Calendar;
-  /** In steps from a fixed origin, one a row; whole numbers when rows lie on the step. */
-  readonly position: Float64Array;
-  /** In `calendar.step.of`: as read where the column holds numbers, else from the earliest row. */
-  readonly time: Float64Array;
-  /** Moments where the column holds dates. */
-  readonly moments: Float64Array | undefined;
-  /** The period of a row as it was written. */
-  readonly written: (row: number) => string;
-  /** Whether `written` says more than `time`: the column holds dates, or there is a pair of columns. */
-  readonly isDated: boolean;
+  /** Unit of the step: "month". */
+  readonly unit: string;
+  readonly step: StepLength;
+  /** The calendar's name, where one was chosen by name. */
+  readonly calendar?: CalendarName;
+  /** How labels are written. */
+  readonly form: PeriodForm;
+  /** What period 0 is counted in: the record's own numbers, moments, or months. */
+  readonly counts: "numbers" | "moments" | "months";
+  /** Period 0: the number, the moment in milliseconds since 1970, or the months since year 0. */
+  readonly origin: number;
+  /** Numbers, milliseconds or months from one period to the next. */
+  readonly stride: number;
+  /** Day of the month of a dated label, its last one where a month has no such day; 31: always the last. */
+  readonly day?: number;
+  /** Milliseconds after midnight of a label in months that has a time of day. */
+  readonly clock?: number;
+}
+
+/** Off by less than this part of a step is a late or early reading of the step. */
+export const leeway = 0.1;
+/** Off by less than this part of a step is a matter of rounding. */
+export const rounding = 1e-6;
+
+/** The label of a period: "2027-03-31", "2027-W11", or its number where the record counts in numbers. */
+export function labelAt(axis: PeriodAxis, index: number): string {
+  const at = axis.origin + index * axis.stride;
+  if (axis.counts === "numbers") return String(Number(at.toPrecision(12)));
+  if (axis.counts === "months" && axis.day === undefined) return monthText(at, axis.form);
+  return momentText(momentAt(axis, index), axis.form);
+}
+
+/** The labels of several periods. */
+export function labelsAt(axis: PeriodAxis, indexes: ArrayLike<number>): readonly string[] {
+  return Array.from(indexes, (index) => labelAt(axis, index));
 }
 
 /**
- * Puts the rows of a record on the axis of periods.
- *
- * @throws {ModelError} `step-missing` | `option-wrong` | `no-period` | `ambiguous-date` | `no-such-period`.
+ * What a place between two periods is called: the date or number that lies there, or, where labels name whole weeks,
+ * months or years, the one that it lies in.
  */
-export function periodAxis(
-  table: ColumnTable,
-  period: string | readonly [string, string],
-  step: StepLength | CalendarName | undefined,
-): PeriodAxis {
-  if (typeof period !== "string") return axisOfPair(table, period, calendarOf(step));
-  const column = columnNamed(table, period, "the period");
-  if (step === undefined) throw stepMissing(period, ...suggestedStep(column, period, holdsDates(column)));
-  const calendar = calendarOf(step);
-  return holdsDates(column) ? axisOfDates(column, period, calendar) : axisOfNumbers(column, period, calendar);
+export function labelBetween(axis: PeriodAxis, index: number, fraction: number): string {
+  const place = index + fraction;
+  if (Math.abs(place - Math.round(place)) <= rounding) return labelAt(axis, Math.round(place));
+  if (axis.counts === "numbers") return labelAt(axis, place);
+  if (!isDated(axis)) return labelAt(axis, Math.ceil(place));
+  const [before, after] = [momentAt(axis, Math.floor(place)), momentAt(axis, Math.floor(place) + 1)];
+  return momentText(before + (after - before) * (place - Math.floor(place)), axis.form);
 }
 
-function calendarOf(step: StepLength | CalendarName | undefined): Calendar {
-  if (typeof step === "object" && step.every > 0 && typeof step.of === "string") return everyUnit(step);
-  const found = typeof step === "string" ? calendarNamed(step) : undefined;
-  if (found === undefined)
-    throw optionWrong(
-      "step",
-      step,
-      `a length such as { every: 12, of: "hour" } or one of ${calendarNames.join(", ")}`,
-    );
-  return found;
+/** A period in a sentence: "month 33", or its label where periods are not mere numbers. */
+export function periodWords(axis: PeriodAxis, index: number): string {
+  return axis.counts === "numbers" ? `${axis.unit} ${labelAt(axis, index)}` : labelAt(axis, index);
 }
 
-/** Text that is not plainly a number is taken for a date; whether it is one is asked row by row. */
-function holdsDates(column: Column): boolean {
-  if (column instanceof Float64Array) return false;
-  const first = column.find((cell) => !isEmpty(cell));
-  return first instanceof Date || (typeof first === "string" && Number.isNaN(Number(first)));
+function momentAt({ counts, origin, stride, day = 1, clock = 0 }: PeriodAxis, index: number): Moment {
+  const at = origin + index * stride;
+  return counts === "months" ? clampedDate(at, day) + clock : at;
 }
 
-function axisOfNumbers(column: Column, name: string, calendar: Calendar): PeriodAxis {
-  const { values } = numberColumn(column, name);
-  for (let row = 0; row < values.length; row++) if (Number.isNaN(values[row])) throw noPeriod(row + 1, name);
-  const position = calendar.step.every === 1 ? values : values.map((value) => value / calendar.step.every);
-  const written = (row: number): string => String(column[row]);
-  return { column: name, calendar, position, time: values, moments: undefined, written, isDated: false };
+/**
+ * The period that a label names, as a row of that label would be placed; undefined where it names none, or several.
+ *
+ * A numbered record is asked by its numbers. A dated one by any text that a period column may hold: a date, a month
+ * or a week that holds a single period of the record is as good as its own label.
+ */
+export function indexOf(axis: PeriodAxis, label: string | number | Date): number | undefined {
+  if (axis.counts === "numbers") return whole((numberIn(label) - axis.origin) / axis.stride, rounding);
+  const read = periodText(typeof label === "number" ? String(label) : label);
+  if (read === undefined) return undefined;
+  const [from, to] = axis.counts === "months" ? monthsOf(axis, read) : momentsOf(axis, read);
+  if (from === to) return from + 0;
+  // No period lies in what the text names: a day or a time close to one is taken for it, as a late reading is.
+  const isClose = axis.counts === "moments" && from > to && isInstant(read);
+  return isClose ? whole((read.start - axis.origin) / axis.stride, leeway) : undefined;
 }
 
-function axisOfDates(column: Column, name: string, calendar: Calendar): PeriodAxis {
-  if (calendar.ofDate === undefined)
-    throw optionWrong(
-      "period",
-      name,
-      `a column of numbers, or a pair of columns such as ["year", "period"], for this step`,
-    );
-  const moments = new Float64Array(column.length);
-  for (let row = 0; row < column.length; row++) moments[row] = momentAt(column[row], row, name);
-  const position = moments.map(calendar.ofDate);
-  const written = (row: number): string => dateText(column[row]);
-  return {
-    column: name,
-    calendar,
-    position,
-    time: fromEarliest(position, calendar),
-    moments,
-    written,
-    isDated: true,
-  };
+const isInstant = ({ form }: PeriodText): boolean => form === "date" || form === "millisecond";
+
+function numberIn(label: string | number | Date): number {
+  return label instanceof Date || String(label).trim() === "" ? Number.NaN : Number(label);
 }
 
-function momentAt(cell: unknown, row: number, name: string): Moment {
-  if (isEmpty(cell)) throw noPeriod(row + 1, name);
-  const moment = momentOf(cell);
-  if (moment === undefined) throw ambiguousDate(row + 1, name, cell);
-  return moment;
+/** First and last period of the months that a text names; the last before the first where there is none. */
+function monthsOf({ origin, stride, step, form }: PeriodAxis, read: PeriodText): readonly [number, number] {
+  const months = stride / step.every;
+  const namesYears = yearForms.includes(read.form);
+  // Which fiscal year a date falls into is known only where the record says when its years begin.
+  const isFiscal = form === "fiscal-year" || (form === "year-pair" && step.begins === undefined);
+  if (isFiscal && !namesYears) return [1, 0];
+  const shift = namesYears ? noShift : shiftOf(step);
+  const placeOf = (moment: Moment): number =>
+    (periodOfMonths(moment, months, shift) - Math.floor(origin / months)) / step.every;
+  return [Math.ceil(placeOf(read.start) - rounding), Math.floor(placeOf(read.end - 1) + rounding)];
 }
 
-function axisOfPair(table: ColumnTable, pair: readonly [string, string], calendar: Calendar): PeriodAxis {
-  const number = calendar.ofYearAndNumber;
-  if (number === undefined)
-    throw optionWrong(
-      "step",
-      calendar.step.of,
-      'one that a year numbers, such as "iso-week", "month" or "4-4-5"',
-    );
-  const [years, numbers] = pair.map(
-    (name) => numberColumn(columnNamed(table, name, "the period"), name).values,
-  );
-  const position = new Float64Array(years!.length);
-  for (let row = 0; row < position.length; row++) {
-    if (Number.isNaN(years![row]! + numbers![row]!)) throw noPeriod(row + 1, pair.join(", "));
-    const found = number(years![row]!, numbers![row]!);
-    if (found === undefined) throw noSuchPeriod(row + 1, pair, years![row]!, numbers![row]!);
-    position[row] = found;
-  }
-  const written = (row: number): string => `${years![row]}, ${numbers![row]}`;
-  const time = fromEarliest(position, calendar);
-  return { column: pair.join(", "), calendar, position, time, moments: undefined, written, isDated: true };
+const yearForms: readonly PeriodForm[] = ["year", "year-pair", "fiscal-year"];
+
+/** First and last period whose moment a text names; weeks are named by any day of theirs. */
+function momentsOf(axis: PeriodAxis, { start, end }: PeriodText): readonly [number, number] {
+  const { origin, stride } = axis;
+  if (axis.calendar !== "iso-week" && axis.form !== "iso-week")
+    return [
+      Math.ceil((start - origin) / stride - rounding),
+      Math.ceil((end - origin) / stride - rounding) - 1,
+    ];
+  const placeOf = (moment: Moment): number => (mondayBefore(moment) - mondayBefore(origin)) / stride;
+  return [Math.ceil(placeOf(start) - rounding), Math.floor(placeOf(end - 1) + rounding)];
 }
 
-function fromEarliest(position: Float64Array, calendar: Calendar): Float64Array {
-  const earliest = position.reduce((a, b) => Math.min(a, b), Number.POSITIVE_INFINITY);
-  return position.map((at) => (at - earliest) * calendar.step.every);
+function whole(place: number, tolerance: number): number | undefined {
+  const nearest = Math.round(place);
+  // `+ 0` makes a negative zero a plain one.
+  return Math.abs(place - nearest) <= tolerance ? nearest + 0 : undefined;
 }
 
-function dateText(cell: unknown): string {
-  return cell instanceof Date ? cell.toISOString().slice(0, 16).replace("T", " ") : String(cell);
+/**
+ * How many periods after the origin of one axis that of another lies; undefined where the two count differently, or
+ * lie between each other's periods.
+ */
+export function periodsAfter(axis: PeriodAxis, other: PeriodAxis): number | undefined {
+  if (axis.counts !== other.counts || axis.stride !== other.stride) return undefined;
+  if (axis.counts === "numbers") return whole((other.origin - axis.origin) / axis.stride, leeway);
+  return indexOf(axis, isDated(axis) && isDated(other) ? new Date(momentAt(other, 0)) : labelAt(other, 0));
+}
+
+/** Whether labels name a day or a time, and not a whole month, year or week. */
+function isDated({ counts, form, day }: PeriodAxis): boolean {
+  return counts === "moments" ? form !== "iso-week" : day !== undefined;
 }

@@ -49,3 +49,34 @@ export function noSuchPeriod(
     { row, columns, year, number },
   );
 }
+
+export function stepWrong(step: unknown, names: readonly string[], nearest: readonly string[]): ModelError {
+  const given = typeof step === "object" ? JSON.stringify(step) : step;
+  return new ModelError(
+    "option-wrong",
+    `The option "step" is ${shown(given)}; it must be a length such as { every: 12, of: "hour" } or one of ${names.join(", ")}.${didYouMean(nearest)}`,
+    { option: "step", value: step },
+  );
+}
+
+export function unitUnknown(unit: unknown, units: readonly string[], nearest: readonly string[]): ModelError {
+  return new ModelError(
+    "unit-unknown",
+    `Option \`step\`: ${shown(unit)} is not a unit of time.${didYouMean(nearest)} Units are ${units.join(", ")}. ` +
+      "To count something else, name the period column after it.",
+    { unit, units, nearest },
+  );
+}
+
+export function beginsWrong(begins: string, unit: string): ModelError {
+  return new ModelError(
+    "option-wrong",
+    `Option \`step\`: \`begins\` is the day on which a year begins, as month and day from 01-01 to 12-28, and goes with of: "year"; ` +
+      `${shown(begins)} was given with of: "${unit}". Write step: { every: 1, of: "year", begins: "04-01" }.`,
+    { begins, unit },
+  );
+}
+
+function didYouMean(nearest: readonly string[]): string {
+  return nearest.length === 0 ? "" : ` Did you mean ${nearest.map((name) => `"${name}"`).join(" or ")}?`;
+}

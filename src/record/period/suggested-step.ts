@@ -1,7 +1,8 @@
 import type { Column } from "../column-table.js";
 import { numberColumn } from "../number-column.js";
-import { isUnit, singular } from "./calendar.js";
-import { dayLength, isMonthEnd, momentOf, monthNumber } from "./calendar-date.js";
+import { isTimeUnit } from "./calendar.js";
+import { calendarDay, dayLength, isMonthEnd, monthOf } from "./moment.js";
+import { momentOf } from "./period-text.js";
 import { unitText } from "./unit-text.js";
 
 /**
@@ -15,11 +16,12 @@ export function suggestedStep(column: Column, name: string, isDated: boolean): r
 function ofDates(column: Column): readonly [string, string] {
   const moments = Array.from<unknown>(column).flatMap((cell) => momentOf(cell) ?? []);
   const closest = closestOf(moments);
-  const months = sameDay(moments) ? closestOf(moments.map(monthNumber)) : 0;
+  const atEnds = moments.every(isMonthEnd);
+  const months = atEnds || sameDay(moments) ? closestOf(moments.map(monthOf)) : 0;
   const fits: readonly (readonly [boolean, string, string])[] = [
-    [moments.every(isMonthEnd), "one month", '"month-end"'],
     [months === 12, "one year", '"year"'],
-    [months === 1, "one month", '"month"'],
+    [months === 3, "one quarter", '"quarter"'],
+    [months === 1, "one month", atEnds ? '"month-end"' : '"month"'],
     [closest === 7 * dayLength, "one week", '"week"'],
     [closest === dayLength, "one day", '"day"'],
     [closest === dayLength / 48, "half an hour", '"half-hour"'],
@@ -33,14 +35,14 @@ function ofDates(column: Column): readonly [string, string] {
 
 /** Whether every date is of the same day of its month, one of those that every month has. */
 function sameDay(moments: readonly number[]): boolean {
-  const days = new Set(moments.map((moment) => new Date(moment).getUTCDate()));
+  const days = new Set(moments.map((moment) => calendarDay(moment).day));
   return days.size === 1 && [...days][0]! <= 28;
 }
 
 function ofNumbers(column: Column, name: string): readonly [string, string] {
   const closest = Number(closestOf(Array.from(numberColumn(column, name).values)).toPrecision(6));
-  const unit = singular(name);
-  return isUnit(unit)
+  const unit = name.trim().toLowerCase().replace(/s$/, "");
+  return isTimeUnit(unit)
     ? [String(closest), `{ every: ${closest}, of: "${unit}" }`]
     : [String(closest), `{ every: ${closest}, of: "hour" }, or whatever unit the column counts,`];
 }

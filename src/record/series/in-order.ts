@@ -1,5 +1,5 @@
 import type { FindingLog } from "../finding-log.js";
-import type { PeriodAxis } from "../period/period-axis.js";
+import type { PlacedRows } from "../period/placed-rows.js";
 import type { RowGroup } from "./group-rows.js";
 import { notIncreasing } from "./refusals.js";
 
@@ -10,36 +10,36 @@ import { notIncreasing } from "./refusals.js";
  */
 export function inOrder(
   group: RowGroup,
-  axis: PeriodAxis,
+  periods: PlacedRows,
   disorder: "refuse" | "sort",
   log: FindingLog,
 ): Int32Array {
-  const { position } = axis;
+  const { position } = periods;
   const { rows } = group;
   let outOfOrder = 0;
   for (let i = 1; i < rows.length; i++) {
     if (position[rows[i]!]! >= position[rows[i - 1]!]!) continue;
-    if (disorder === "refuse") throw refusal(group, axis, i);
+    if (disorder === "refuse") throw refusal(group, periods, i);
     outOfOrder++;
-    noteSorted(group, axis, i, log);
+    noteSorted(group, periods, i, log);
   }
   if (outOfOrder === 0) return rows;
   return rows.slice().sort((a, b) => position[a]! - position[b]! || a - b);
 }
 
-function refusal(group: RowGroup, axis: PeriodAxis, i: number): Error {
+function refusal(group: RowGroup, periods: PlacedRows, i: number): Error {
   const [before, now] = [group.rows[i - 1]!, group.rows[i]!];
-  return notIncreasing(now + 1, axis.column, group.name, axis.written(before), axis.written(now));
+  return notIncreasing(now + 1, periods.column, group.name, periods.written(before), periods.written(now));
 }
 
-function noteSorted(group: RowGroup, axis: PeriodAxis, i: number, log: FindingLog): void {
+function noteSorted(group: RowGroup, periods: PlacedRows, i: number, log: FindingLog): void {
   const [before, now] = [group.rows[i - 1]!, group.rows[i]!];
   log.note({
     kind: "disorder",
     row: now + 1,
-    column: axis.column,
-    value: axis.written(now),
-    message: `Times are not increasing at row ${now + 1}: ${axis.written(now)} follows ${axis.written(before)}.`,
+    column: periods.column,
+    value: periods.written(now),
+    message: `Times are not increasing at row ${now + 1}: ${periods.written(now)} follows ${periods.written(before)}.`,
     done: "sorted by period",
   });
 }

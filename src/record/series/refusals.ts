@@ -1,4 +1,6 @@
 import { ModelError } from "../../numeric/index.js";
+import type { PeriodAxis } from "../period/period-axis.js";
+import { unitText } from "../period/unit-text.js";
 
 export function notIncreasing(
   row: number,
@@ -34,5 +36,26 @@ export function duplicatePeriod(facts: DuplicateFacts, more: number): ModelError
     `${column} ${period} appears ${rows.length} times${where}, at rows ${rows.join(" and ")}, with ${alike} (${values.join(", ")}).${others} ` +
       'Possible duplicate - keep both? Say duplicates: "average", "first", "last" or "sum", or name the replicates column.',
     { ...facts },
+  );
+}
+
+export function rowsOverlap(group: string, first: string, last: string): ModelError {
+  const where = group === "" ? "" : ` of "${group}"`;
+  return new ModelError(
+    "rows-overlap",
+    `The new rows${where} begin at ${first}, and the record that the fit already has runs to ${last}. Give only later rows; ` +
+      "to change earlier ones, fit the corrected record anew.",
+    { group, first, last },
+  );
+}
+
+export function axesDiffer(record: PeriodAxis, later: PeriodAxis): ModelError {
+  const told = ({ column, step, form }: PeriodAxis): string =>
+    `"${column}" in steps of ${unitText(step.every, step.of)}, by ${form === "number" ? "number" : "date"}`;
+  return new ModelError(
+    "axes-differ",
+    `The new rows do not lie on the record's periods: the record counts ${told(record)}, the new rows ${told(later)}. ` +
+      "Read both with the same `period` and `step`.",
+    { record, later },
   );
 }

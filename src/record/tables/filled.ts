@@ -1,10 +1,11 @@
 import { type Column, type ColumnTable, columnNamed, isEmpty } from "../column-table.js";
 import { numberColumn } from "../number-column.js";
 import { packed } from "../packed.js";
-import { momentText } from "../period/calendar-date.js";
-import type { PeriodAxis } from "../period/period-axis.js";
+import { axisOfRows } from "../period/axis-of-rows.js";
+import { labelAt } from "../period/period-axis.js";
+import type { PlacedRows } from "../period/placed-rows.js";
 import { optionWrong } from "../refusals.js";
-import { type PeriodsOf, type PlacedTable, placed } from "./placed-series.js";
+import { type PeriodsOf, type PlacedSeries, type PlacedTable, placed } from "./placed-series.js";
 
 /** How a missing value is filled: the one before it, a line between its neighbours, or a number. */
 export type FillRule = "previous" | "between" | number;
@@ -34,25 +35,34 @@ export function filled(record: ColumnTable, options: FillOptions): ColumnTable {
     columnNamed(place.table, options.column, "the column to fill"),
     options.column,
   );
-  const rows = place.series.flatMap((series) => everyPeriod(series.rows, series.index));
-  const cells = place.series.flatMap(({ rows: own, index }) => filledSeries(own, index, values, rule));
+  if (typeof options.period !== "string")
+    throw optionWrong(
+      "period",
+      place.periods.column,
+      "a single column, so that the missing periods can be named",
+    );
+  const rows = place.series.flatMap((series) => everyPeriod(series, place.periods));
+  const cells = place.series.flatMap((series) => filledSeries(series, values, rule));
   return assembled(place, options.column, rows, cells);
 }
 
-/** The row of each period of a series, or its first row and the steps from there where it has none. */
-type PeriodRow = { readonly row: number } | { readonly first: number; readonly step: number };
+/** The row of each period of a series; where it has none, how the period is written, and the first row of the series. */
+type PeriodRow = { readonly row: number } | { readonly first: number; readonly period: string | number };
 
-function everyPeriod(rows: Int32Array, index: Int32Array): PeriodRow[] {
+function everyPeriod(series: PlacedSeries, periods: PlacedRows): PeriodRow[] {
+  const { rows, index } = series;
   const rowAt = new Map(Array.from(index, (step, i) => [step, rows[i]!]));
+  const axis = axisOfRows(periods, series);
   return Array.from({ length: index[index.length - 1]! + 1 }, (_, step) => {
     const row = rowAt.get(step);
-    return row === undefined ? { first: rows[0]!, step } : { row };
+    if (row !== undefined) return { row };
+    const label = labelAt(axis, step);
+    return { first: rows[0]!, period: axis.counts === "numbers" ? Number(label) : label };
   });
 }
 
 function filledSeries(
-  rows: Int32Array,
-  index: Int32Array,
+  { rows, index }: PlacedSeries,
   values: Float64Array,
   rule: FillRule,
 ): readonly FilledCell[] {
@@ -84,31 +94,16 @@ function fill(rule: FillRule, step: number, before: Known, after: Known): number
   return before[1] + ((after![1] - before[1]) * (step - before[0])) / (after![0] - before[0]);
 }
 
-/** How a period without a row is written: as a number, or as the date that many steps after the first. */
-function missingPeriod(axis: PeriodAxis): (first: number, step: number) => unknown {
-  const { calendar, moments, written } = axis;
-  if (!axis.isDated) return (first, step) => axis.time[first]! + step * calendar.step.every;
-  const { after } = calendar;
-  if (moments === undefined || after === undefined || !/^\d{4}-\d{2}-\d{2}/.test(written(0)))
-    throw optionWrong(
-      "period",
-      axis.column,
-      "a column of numbers or of dates such as 2026-03-31, so that the missing periods can be named",
-    );
-  return (first, step) => momentText(after(moments[first]!, step), written(first).includes(":"));
-}
-
 function assembled(
-  { table, axis, by }: PlacedTable,
+  { table, periods, by }: PlacedTable,
   column: string,
   rows: readonly PeriodRow[],
   cells: readonly FilledCell[],
 ): ColumnTable {
-  const periodAt = missingPeriod(axis);
   const cellOf = (name: string, source: Column, at: PeriodRow, i: number): unknown => {
     if (name === column) return cells[i]!.value;
     if ("row" in at) return source[at.row];
-    if (name === axis.column) return periodAt(at.first, at.step);
+    if (name === periods.column) return at.period;
     return by.includes(name) ? source[at.first] : null;
   };
   const columns = table.columns.map((source, c) =>

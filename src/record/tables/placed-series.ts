@@ -4,7 +4,7 @@ import { decided } from "../decisions/correct.js";
 import { findingLog } from "../finding-log.js";
 import type { StepLength } from "../observations.js";
 import type { CalendarName } from "../period/calendar.js";
-import { type PeriodAxis, periodAxis } from "../period/period-axis.js";
+import { type PlacedRows, placedRows } from "../period/placed-rows.js";
 import { wholeSteps } from "../period/whole-steps.js";
 import { noDataRows } from "../refusals.js";
 import { groupRows } from "../series/group-rows.js";
@@ -28,7 +28,7 @@ export interface PlacedSeries {
 export interface PlacedTable {
   /** With the analyst's corrections put in. */
   readonly table: ColumnTable;
-  readonly axis: PeriodAxis;
+  readonly periods: PlacedRows;
   readonly by: readonly string[];
   readonly series: readonly PlacedSeries[];
 }
@@ -42,26 +42,26 @@ export function placed(record: ColumnTable, { period, step, by = [] }: PeriodsOf
   if (rowCount(record) === 0) throw noDataRows();
   const table = decided(record);
   const names = typeof by === "string" ? [by] : by;
-  const axis = periodAxis(table, period, step);
+  const periods = placedRows(table, period, step);
   const log = findingLog();
   const all = Int32Array.from({ length: rowCount(table) }, (_, row) => row);
   const series = groupRows(table, names, all, log).map((group): PlacedSeries => {
-    const rows = inOrder(group, axis, "refuse", log);
-    const index = wholeSteps(rows, axis, "refuse", log);
+    const rows = inOrder(group, periods, "refuse", log);
+    const index = wholeSteps(rows, rows[0]!, periods, "refuse", log);
     const twice = index.findIndex((step, i) => i > 0 && step === index[i - 1]);
-    if (twice > 0) throw doubled(group.name, axis, rows, twice);
+    if (twice > 0) throw doubled(group.name, periods, rows, twice);
     return { rows, index };
   });
-  return { table, axis, by: names, series };
+  return { table, periods, by: names, series };
 }
 
-function doubled(group: string, axis: PeriodAxis, rows: Int32Array, at: number): Error {
+function doubled(group: string, periods: PlacedRows, rows: Int32Array, at: number): Error {
   const [first, second] = [rows[at - 1]!, rows[at]!];
   const facts = {
     rows: [first + 1, second + 1],
-    column: axis.column,
+    column: periods.column,
     group,
-    period: axis.written(second),
+    period: periods.written(second),
     values: ["", ""],
   };
   return duplicatePeriod(facts, 0);

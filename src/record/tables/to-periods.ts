@@ -1,9 +1,10 @@
 import { type ColumnTable, columnNamed } from "../column-table.js";
 import { numberColumn } from "../number-column.js";
+import type { Measured } from "../observation-options.js";
 import type { StepLength } from "../observations.js";
-import type { CalendarName } from "../period/calendar.js";
-import { type PeriodAxis, periodAxis } from "../period/period-axis.js";
-import { optionWrong } from "../refusals.js";
+import { type CalendarName, numberOfMoment } from "../period/calendar.js";
+import { type PlacedRows, placedRows } from "../period/placed-rows.js";
+import { optionMissing, optionWrong } from "../refusals.js";
 import { tableOfRows } from "../table-of-rows.js";
 import { type PeriodsOf, type PlacedSeries, placed } from "./placed-series.js";
 import { type Summary, summaryOf } from "./summary-of.js";
@@ -11,8 +12,10 @@ import { type Summary, summaryOf } from "./summary-of.js";
 /** Which longer period to count by, and how each column is taken over it. */
 export interface ToPeriodsOptions extends PeriodsOf {
   readonly to: StepLength | CalendarName;
-  /** A flow adds up ("sum"); a level at an instant is its "last" one. */
-  readonly take: Readonly<Record<string, Summary>>;
+  /** By column, how its values become one. */
+  readonly take?: Readonly<Record<string, Summary>>;
+  /** By column, what it is: of a level the last value is taken, of a flow the sum. */
+  readonly measured?: Readonly<Record<string, Measured>>;
 }
 
 /**
@@ -23,12 +26,12 @@ export interface ToPeriodsOptions extends PeriodsOf {
  * @throws {ModelError} `missing-column` | `not-a-number` | `option-wrong`, and those of the period column.
  */
 export function toPeriods(record: ColumnTable, options: ToPeriodsOptions): ColumnTable {
-  const { table, axis, by, series } = placed(record, options);
-  const longer = periodAxis(table, options.period, options.to);
-  const { of } = axis.calendar.step;
-  if (!axis.isDated && longer.calendar.step.of !== of)
+  const { table, periods, by, series } = placed(record, options);
+  const longer = placedRows(table, options.period, options.to);
+  const { of } = periods.calendar.step;
+  if (periods.moments === undefined && longer.calendar.step.of !== of)
     throw optionWrong("to", options.to, `a number of ${of}, because the periods are numbers and not dates`);
-  const taken = Object.entries(options.take).map(([name, take]) => ({
+  const taken = Object.entries(summariesOf(options)).map(([name, take]) => ({
     name,
     summary: summaryOf(take),
     values: numberColumn(columnNamed(table, name, "a column to take over"), name).values,
@@ -37,7 +40,8 @@ export function toPeriods(record: ColumnTable, options: ToPeriodsOptions): Colum
     const broken = brokenPeriods(own, longer);
     return Array.from(rowsByPeriod(own, longer), ([period, inside]) => ({
       ...Object.fromEntries(by.map((name) => [name, columnNamed(table, name, "a series")[inside[0]!]])),
-      [axis.column]: axis.isDated ? axis.written(inside[0]!) : axis.time[inside[0]!],
+      [periods.column]:
+        periods.moments === undefined ? periods.time[inside[0]!] : periods.written(inside[0]!),
       ...Object.fromEntries(
         taken.map(({ name, summary, values }) => [
           name,
@@ -50,24 +54,38 @@ export function toPeriods(record: ColumnTable, options: ToPeriodsOptions): Colum
   return tableOfRows(rows);
 }
 
-function rowsByPeriod({ rows }: PlacedSeries, longer: PeriodAxis): ReadonlyMap<number, readonly number[]> {
-  const periods = new Map<number, number[]>();
+/** What is taken of each column: stated, or by what the column is. */
+function summariesOf({ take = {}, measured = {} }: ToPeriodsOptions): Readonly<Record<string, Summary>> {
+  const byKind = Object.entries(measured).map(([name, kind]): [string, Summary] => {
+    if (kind !== "level" && kind !== "flow") throw optionWrong("measured", kind, "one of level, flow");
+    return [name, kind === "flow" ? "sum" : "last"];
+  });
+  if (byKind.length + Object.keys(take).length === 0)
+    throw optionMissing(
+      "take",
+      'Say what becomes of each column: measured: { paid: "flow", owed: "level" }.',
+    );
+  return { ...Object.fromEntries(byKind), ...take };
+}
+
+function rowsByPeriod({ rows }: PlacedSeries, longer: PlacedRows): ReadonlyMap<number, readonly number[]> {
+  const inside = new Map<number, number[]>();
   for (const row of rows) {
     const period = Math.floor(longer.position[row]!);
-    periods.set(period, [...(periods.get(period) ?? []), row]);
+    inside.set(period, [...(inside.get(period) ?? []), row]);
   }
-  return periods;
+  return inside;
 }
 
 /** Longer periods in which a row of the series is missing: its moment lies evenly between its neighbours'. */
-function brokenPeriods({ rows, index }: PlacedSeries, longer: PeriodAxis): ReadonlySet<number> {
+function brokenPeriods({ rows, index }: PlacedSeries, longer: PlacedRows): ReadonlySet<number> {
   const broken = new Set<number>();
   const { moments, calendar, position } = longer;
   for (let i = 1; i < rows.length; i++) {
     const [before, after, steps] = [rows[i - 1]!, rows[i]!, index[i]! - index[i - 1]!];
     for (let step = 1; step < steps; step++) {
       const between = (of: Float64Array): number => of[before]! + ((of[after]! - of[before]!) * step) / steps;
-      const at = moments && calendar.ofDate ? calendar.ofDate(between(moments)) : between(position);
+      const at = moments ? numberOfMoment(calendar, between(moments))! : between(position);
       broken.add(Math.floor(at));
     }
   }

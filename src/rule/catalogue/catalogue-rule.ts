@@ -1,3 +1,4 @@
+import { freezeDeep } from "../../numeric/index.js";
 import { makeRule } from "../make-rule.js";
 import type { RecurrenceOptions } from "../recurrence-options.js";
 import type { Rule } from "../rule.js";
@@ -22,11 +23,6 @@ function unitsFromState(
   return { ...Object.fromEntries(derived), ...given };
 }
 
-const freeze = <T>(value: T): T => {
-  if (typeof value === "object" && value !== null) Object.values(value).forEach(freeze);
-  return Object.freeze(value);
-};
-
 /** Makes the rule of a catalogue entry; options override the entry. */
 export function catalogueRule(entry: CatalogueEntry, options: NamedRuleOptions = {}): Rule {
   const { text, inputs = [], bounds = {}, start = {}, ...about } = entry;
@@ -40,5 +36,5 @@ export function catalogueRule(entry: CatalogueEntry, options: NamedRuleOptions =
     bounds: { ...free(bounds), ...options.bounds },
     start: { ...free(start), ...options.start },
   };
-  return makeRule(text, full, freeze(about));
+  return makeRule(text, full, freezeDeep(about));
 }

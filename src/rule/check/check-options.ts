@@ -26,6 +26,16 @@ function optionValueError(option: string, name: string, wanted: string, given: u
   );
 }
 
+function checkName(name: unknown): void {
+  if (name === undefined || (typeof name === "string" && name.trim() !== "")) return;
+  const given = JSON.stringify(name) ?? String(name);
+  throw new ModelError(
+    "unreadable-option",
+    `Option \`name\` must be text, but ${given} was given. Write \`name: "crowding"\`.`,
+    { option: "name", given },
+  );
+}
+
 type Accepts = (value: never, name: string) => boolean;
 interface OptionCheck {
   readonly option: "units" | "bounds" | "start" | "fixed" | "initial" | "noise";
@@ -35,6 +45,12 @@ interface OptionCheck {
   readonly accepts: Accepts;
 }
 
+const isRange = (value: unknown): boolean =>
+  Array.isArray(value) && value.length === 2 && value[0] < value[1];
+const isRangeWithBehaviour = (value: unknown): boolean => {
+  const { range, atBounds } = (value ?? {}) as { readonly range?: unknown; readonly atBounds?: unknown };
+  return isRange(range) && (atBounds === "absorbed" || atBounds === "error");
+};
 const isNumber = (value: unknown): boolean => typeof value === "number" && Number.isFinite(value);
 
 function checks(rule: CheckedRule): readonly OptionCheck[] {
@@ -53,9 +69,10 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
       option: "bounds",
       what: "state or parameter",
       names: [...states, ...parameters],
-      expected: () => "two numbers, the lower one first, as in [0, Infinity]",
-      accepts: (value: readonly [number, number]) =>
-        Array.isArray(value) && value.length === 2 && value[0] < value[1],
+      expected: (name) =>
+        `two numbers, the lower one first, as in [0, Infinity]${states.includes(name) ? ', or { range: [0, Infinity], atBounds: "error" } (or "absorbed")' : ""}`,
+      accepts: (value: unknown, name: string) =>
+        isRange(value) || (states.includes(name) && isRangeWithBehaviour(value)),
     },
     { option: "start", what: "parameter", names: parameters, expected: number, accepts: isNumber },
     { option: "fixed", what: "parameter", names: parameters, expected: number, accepts: isNumber },
@@ -88,6 +105,7 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
 
 /** Rejects options for names that the rule does not have, and values of the wrong kind. */
 export function checkOptions(rule: CheckedRule, options: RecurrenceOptions): void {
+  checkName(options.name);
   for (const { option, what, names, expected, accepts } of checks(rule)) {
     for (const [name, value] of Object.entries(options[option] ?? {})) {
       if (!names.includes(name)) throw unknownOptionNameError(option, name, names, what);

@@ -1,0 +1,20 @@
+import type { Rule } from "./rule.js";
+
+/**
+ * What a rule is called in a title, table or sentence: its name, or its lines.
+ *
+ * @example ruleLabel(recurrence("ΔN = r*N*(1 - N/K)", { name: "crowding" })); // "crowding"
+ */
+export function ruleLabel(rule: Rule): string {
+  return rule.name ?? ruleLines(rule);
+}
+
+/**
+ * The lines of a rule in one, without comments.
+ *
+ * @example ruleLines(recurrence("births = R*N   # a year\nN[t+1] = births")); // "births = R*N; N[t+1] = births"
+ */
+export function ruleLines({ text }: Rule): string {
+  const lines = text.split("\n").map((line) => line.replace(/#.*/u, "").trim());
+  return lines.filter((line) => line !== "").join("; ");
+}
