@@ -1,6 +1,8 @@
+import { plural } from "../wording/index.js";
 import type { EquilibriumPoint } from "./change-figure.js";
 import { equilibriumLayers } from "./equilibrium-layers.js";
 import { type Axis, type Figure, figure } from "./figure.js";
+import { significant } from "./number-text.js";
 
 /** Options of `cobwebFigure`. */
 export interface CobwebFigureOptions {
@@ -28,6 +30,8 @@ export function cobwebFigure(options: CobwebFigureOptions): Figure {
   const heights = equilibria.map(({ value }) => value);
   const first = rule.present[0] ?? 0;
   const last = rule.present[rule.present.length - 1] ?? 1;
+  const periods = trajectory.length - 1;
+  const at = (period: number): string => significant(trajectory[period] ?? Number.NaN);
   return figure({
     title,
     x: { ...state, title: `${state.title} at t` },
@@ -37,14 +41,14 @@ export function cobwebFigure(options: CobwebFigureOptions): Figure {
       { mark: "line", name: rule.name, x: rule.present, y: rule.next, style: 0 },
       {
         mark: "line",
-        name: `trajectory over ${trajectory.length - 1} periods`,
+        name: `trajectory over ${plural(periods, "period")}`,
         ...steps(trajectory),
         style: 1,
       },
       ...equilibriumLayers(equilibria, heights),
     ],
     notes,
-    summary: `The path begins at ${trajectory[0]} and after ${trajectory.length - 1} periods is at ${trajectory[trajectory.length - 1]}.`,
+    summary: `The trajectory starts at ${at(0)} and is at ${at(periods)} after ${plural(periods, "period")}.`,
   });
 }
 

@@ -19,7 +19,7 @@ export interface ForecastBand {
 export interface ProjectedSeries {
   /** "" for a single series. */
   readonly name: string;
-  /** Its own horizontal axis, where that of the figure does not hold. */
+  /** Horizontal axis of this series, if it differs from the figure's. */
   readonly x?: Axis;
   readonly recorded: RecordedSeries;
   readonly central: LineSeries;

@@ -2,8 +2,8 @@ import { type Column, type Table, table } from "../tables/index.js";
 import { downsample } from "./downsample.js";
 import type { Figure, Panel } from "./figure.js";
 import type { Layer } from "./layer.js";
-import { placeText } from "./period-places.js";
 import { axisTitle } from "./plot-text.js";
+import { positionLabel } from "./position-labels.js";
 import { areYears } from "./year-axis.js";
 
 type Drawn = Extract<Layer, { mark: "points" | "line" | "band" | "bars" }>;
@@ -27,7 +27,10 @@ function panelData(panel: Panel, title: string): Table | undefined {
   const place: Column = across.periods
     ? { key: "place", label, kind: "text" }
     : { key: "place", label, kind: "number", digits: 6, grouped };
-  const labelled = rows.map((row) => ({ ...row, place: placeText(across, row["place"] as number | string) }));
+  const labelled = rows.map((row) => ({
+    ...row,
+    place: positionLabel(across, row["place"] as number | string),
+  }));
   return table({
     title: panel.title === "" ? `Data: ${title}` : panel.title,
     columns: [place, ...drawn.flatMap(layerColumns)],

@@ -2,8 +2,8 @@ import { plural } from "../wording/index.js";
 import type { Axis, Figure, Panel } from "./figure.js";
 import type { Layer, Places } from "./layer.js";
 import { significant } from "./number-text.js";
-import { placeText } from "./period-places.js";
 import { axisTitle } from "./plot-text.js";
+import { positionLabel } from "./position-labels.js";
 
 /** Text alternative of a figure: what it shows, in sentences. */
 export function describeFigure(figure: Figure): string[] {
@@ -31,7 +31,7 @@ function describeLayer(layer: Layer, across: Axis): string {
     case "threshold":
       return `${layer.name}: threshold at ${significant(layer.y)}.`;
     case "vertical":
-      return `${layer.name}: vertical line at ${placeText(across, layer.x)}.`;
+      return `${layer.name}: vertical line at ${positionLabel(across, layer.x)}.`;
     case "label":
       return layer.name;
     case "arrow":

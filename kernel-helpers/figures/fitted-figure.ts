@@ -7,7 +7,7 @@ import { sharedScale } from "./shared-scale.js";
 export interface FittedSeries {
   /** "" for a single series. */
   readonly name: string;
-  /** Its own horizontal axis, where that of the figure does not hold. */
+  /** Horizontal axis of this series, if it differs from the figure's. */
   readonly x?: Axis;
   readonly observed: RecordedSeries;
   /** Replicate readings of the observed values, drawn hollow. */

@@ -1,8 +1,8 @@
 import { type Table, table } from "../tables/index.js";
 import { type Axis, type Figure, figure } from "./figure.js";
 import type { Layer } from "./layer.js";
-import { placeText } from "./period-places.js";
 import { axisTitle } from "./plot-text.js";
+import { positionLabel } from "./position-labels.js";
 import { type LineSeries, recordedStyle } from "./recorded-series.js";
 import type { SmallMultiplesOptions, SmallSeries } from "./small-multiples.js";
 import { areYears } from "./year-axis.js";
@@ -38,7 +38,7 @@ export function framedMultiples(
     ),
   ];
   const range = (axis: Axis, [least, greatest]: Ends): string =>
-    `${axisTitle(axis)} from ${placeText(axis, least)} to ${placeText(axis, greatest)}`;
+    `${axisTitle(axis)} from ${positionLabel(axis, least)} to ${positionLabel(axis, greatest)}`;
   const scale = `Axes of every frame: ${range(x, ends.x)} (horizontal), ${range(y, ends.y)} (vertical).`;
   const bare = { bare: true } as const;
   const panel = {
@@ -91,7 +91,7 @@ function seriesTable(title: string, x: Axis, y: Axis, series: readonly SmallSeri
     rows: series.flatMap(({ name, recorded }) =>
       Array.from({ length: recorded.x.length }, (_, i) => ({
         name,
-        x: x.periods ? placeText(x, recorded.x[i]!) : recorded.x[i],
+        x: x.periods ? positionLabel(x, recorded.x[i]!) : recorded.x[i],
         recorded: recorded.y[i],
       })),
     ),

@@ -1,10 +1,10 @@
 import { theme, typeface } from "../tables/index.js";
 import type { Axis, Figure, Panel } from "./figure.js";
 import { type PanelPosition, panelLayout } from "./panel-layout.js";
-import { periodTicks } from "./period-places.js";
 import { panelMarks } from "./plot-marks.js";
 import { axisTitle, plotText } from "./plot-text.js";
 import { axisName, type PlotTrace } from "./plot-traces.js";
+import { periodTicks } from "./position-labels.js";
 import { hasYearAxis } from "./year-axis.js";
 
 /** Layout for the plotting library; `height` in pixels. */

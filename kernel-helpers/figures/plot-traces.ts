@@ -2,10 +2,10 @@ import { downsample } from "./downsample.js";
 import type { Panel } from "./figure.js";
 import type { BandLayer, BarsLayer, Layer, LineLayer } from "./layer.js";
 import { type SeriesStyle, seriesStyle, tint } from "./palette.js";
-import { placeText } from "./period-places.js";
 import { plainValues } from "./plain-values.js";
 import { plotText } from "./plot-text.js";
 import { pointsTrace } from "./points-trace.js";
+import { positionLabel } from "./position-labels.js";
 
 /** One trace of the plotting library. */
 export type PlotTrace = Readonly<Record<string, unknown>>;
@@ -31,7 +31,7 @@ function labelledHover({ x }: Panel, trace: PlotTrace): PlotTrace {
   const places = trace["x"];
   if (x.periods === undefined || trace["hoverinfo"] === "skip" || !Array.isArray(places)) return {};
   const text = places.map((place: unknown) =>
-    typeof place === "number" ? plotText(placeText(x, place), 28) : "",
+    typeof place === "number" ? plotText(positionLabel(x, place), 28) : "",
   );
   return { text, hovertemplate: "%{text}, %{y}" };
 }

@@ -84,7 +84,7 @@ function noLimit(x: number, y: number, direction: "left" | "right"): Layer {
     name: direction === "left" ? "no lower limit" : "no upper limit",
     x,
     y,
-    direction: direction,
+    direction,
     style: 3,
   };
 }
@@ -93,9 +93,9 @@ function openEndNotes({ parameter, lower, upper }: ProfileCurve): string[] {
   if (lower !== undefined && upper !== undefined) return [];
   const limit =
     lower === undefined && upper === undefined
-      ? "limit"
+      ? "lower or upper limit"
       : lower === undefined
         ? "lower limit"
         : "upper limit";
-  return [`This record sets no ${limit} for ${parameter}.`];
+  return [`The record determines no ${limit} for ${parameter}.`];
 }

@@ -1,7 +1,7 @@
 import { plural } from "../wording/index.js";
 import { type Axis, type Figure, figure } from "./figure.js";
 import type { Layer, PointsLayer } from "./layer.js";
-import { placeText } from "./period-places.js";
+import { positionLabel } from "./position-labels.js";
 import { breakAtGaps, type RecordedSeries } from "./recorded-series.js";
 
 /** A recorded value with a finding. */
@@ -50,7 +50,7 @@ export function recordFigure({ title, x, y, series, flagged = [], notes = [] }: 
   };
   const reasons = flagged
     .slice(0, maxListed)
-    .map((flag) => `Flagged at ${x.periods === undefined ? flag.x : placeText(x, flag.x)}: ${flag.why}`);
+    .map((flag) => `Flagged at ${x.periods === undefined ? flag.x : positionLabel(x, flag.x)}: ${flag.why}`);
   if (flagged.length > maxListed)
     reasons.push(`${plural(flagged.length - maxListed, "more flagged value")}.`);
   return figure({

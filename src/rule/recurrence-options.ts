@@ -1,10 +1,10 @@
 import type { ProcessNoise } from "./rule.js";
-import type { AtBound } from "./state-bounds.js";
+import type { BoundBehaviour } from "./state-bounds.js";
 
-/** Lowest and highest value; for a state also what becomes of it there. */
+/** Lowest and highest value; for a state also what happens there. */
 export type Bounds =
   | readonly [number, number]
-  | { readonly range: readonly [number, number]; readonly atBounds: AtBound };
+  | { readonly range: readonly [number, number]; readonly atBounds: BoundBehaviour };
 
 /** Options of a rule. */
 export interface RecurrenceOptions {
@@ -18,8 +18,8 @@ export interface RecurrenceOptions {
   readonly units?: Readonly<Record<string, string>>;
   /**
    * Lower and upper bound by state or parameter, as in { K: [0, Infinity] }. For a state also what happens there:
-   * { N: { range: [0, 500], atBounds: "error" } }. Default: a state is absorbed at a lower bound of 0 (it stays 0); any
-   * other bound is an error of the rule, at which a path ends.
+   * { N: { range: [0, 500], atBounds: "error" } }. Default: a lower bound of 0 absorbs the state (it
+   * stays 0); beyond any other bound a path ends with a warning.
    */
   readonly bounds?: Readonly<Record<string, Bounds>>;
   /** Starting value of a fit, by parameter. */
