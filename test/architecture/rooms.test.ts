@@ -61,6 +61,6 @@ test.each([
   "wording-imports-nothing-else",
   "wording-is-entered-through-its-index",
   "pure-rooms-touch-no-node-built-in",
-])("the import rule %s is seen to fail on a planted violation", (rule) => {
+])("the import rule %s fails on a planted violation", (rule) => {
   expect([...broken]).toContain(rule);
 });
