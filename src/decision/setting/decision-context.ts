@@ -68,15 +68,14 @@ export interface DecisionContext extends MeasureUnits {
   readonly seed: number;
   /** Random numbers of the question, the same at every call: those of a forecast or simulation with this seed. */
   readonly stream: () => RandomStream;
-  /** Called before each run of the rule. */
+  /** Called before each run of all paths. */
   readonly tick: Tick;
   /** The ground under other plans of inputs. */
   readonly planned: (plans: InputPlans) => Ground;
 }
 
-/** Runs that an answer takes, roughly: a place in the range each, and for a fit some at every draw of its parameters. */
-const runsOfRule = 100;
-const runsOfFit = 5000;
+/** Runs of all paths that an answer takes, roughly: one for each place in the range that is looked at. */
+const runs = 100;
 
 /** Whether a subject is a fit. */
 export const isFit = (subject: Fit | Rule): subject is Fit => subject.kind === "fit";
@@ -126,7 +125,7 @@ function fitContext(fit: Fit, options: DecisionOptions): OwnContext {
         (own) => own.jump(),
         randomStream(options.seed ?? 1),
       ),
-    tick: ticker(options, runsOfFit),
+    tick: ticker(options, runs),
     planned,
     unitOf: (name) => {
       const state = stateOf(name);
@@ -172,7 +171,7 @@ function ruleContext(rule: Rule, options: DecisionOptions): OwnContext {
     plans: options.inputs ?? {},
     changeAt: (at) => ruleNoise(rule, at, options.noise),
     stream: () => randomStream(options.seed ?? 1),
-    tick: ticker(options, runsOfRule),
+    tick: ticker(options, runs),
     planned,
     unitOf: (name) => rule.units[stateOf(name)] ?? "",
     periodUnit: axis.unit,
