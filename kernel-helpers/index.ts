@@ -56,8 +56,9 @@ export type {
   DensityDependence,
   DensityOptions,
   ProposeOptions,
+  SameParameters,
 } from "../src/evidence/index.js";
-export { leastSquares, ModelError } from "../src/numeric/index.js";
+export { ModelError } from "../src/numeric/index.js";
 export type {
   ForecastOptions,
   SimulateOptions,
@@ -98,6 +99,8 @@ export {
 export { type Explanation, explain } from "./functions/explain.js";
 export { estimates, fit, points, summary } from "./functions/fits.js";
 export { expanding, fill, longer, rolling, shift, toPeriods, wider } from "./functions/frames.js";
+export { leastSquares } from "./functions/least-squares.js";
+export { numberFormat } from "./functions/number-format.js";
 export { forecast, simulate } from "./functions/projections.js";
 export { propose } from "./functions/proposals.js";
 export {
@@ -114,6 +117,8 @@ export {
   recurrence,
   rules,
 } from "./functions/rules.js";
+export { sameParameters } from "./functions/same-parameters.js";
+export { loadResult, saveResult } from "./functions/saved.js";
 export { show } from "./functions/show.js";
 export type { Term } from "./glossary/index.js";
 export { type Progress, progress, withProgress } from "./progress/index.js";
@@ -132,7 +137,6 @@ export type {
 } from "./results/index.js";
 export {
   type NumberFormat,
-  numberFormat,
   type Table,
   type TableOptions,
   table,

@@ -15,6 +15,15 @@ export function emptySample(): ModelError {
   );
 }
 
+export function interrupted(done: number, of: number, reason: unknown): ModelError {
+  return new ModelError(
+    "interrupted",
+    `The signal ended the run after ${done} of ${of}; its result is not kept. Run it again without aborting for one.`,
+    { done, of },
+    reason,
+  );
+}
+
 export function badSeed(seed: unknown): ModelError {
   return new ModelError(
     "bad-seed",
@@ -99,5 +108,28 @@ export function badValue(asked: string, value: unknown): ModelError {
     "bad-value",
     `\`${asked}\` takes one number; ${String(value)} was given. Give a single number, as in \`${asked}(3)\`; for a list, call it for each value with \`map\`.`,
     { value },
+  );
+}
+
+export function notSavable(place: string, what: string): ModelError {
+  return new ModelError(
+    "not-savable",
+    `${place} is a ${what}, which cannot be saved. Save results of this package, or plain lists, records and numbers.`,
+    { place, what },
+  );
+}
+
+export function noSavedResult(): ModelError {
+  return new ModelError(
+    "no-saved-result",
+    'The text was not written by `saveResult`. Give the text of a saved result, as `loadResult(await readFile(path, "utf8"))`.',
+  );
+}
+
+export function futureFormat(found: unknown, known: number): ModelError {
+  return new ModelError(
+    "newer-format",
+    `The result was saved in format version ${String(found)}; this version of the package reads up to ${known}. Update the package, or save the result again with this one.`,
+    { found, known },
   );
 }

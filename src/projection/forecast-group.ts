@@ -1,5 +1,5 @@
 import { type Fit, type GroupFit, problemOf } from "../estimate/index.js";
-import type { RandomStream } from "../numeric/index.js";
+import { type RandomStream, reporter } from "../numeric/index.js";
 import { indexOf, labelAt, labelsAt, periodWords } from "../record/index.js";
 import { dependsOnPeriod, type StateBound } from "../rule/index.js";
 import { type CentralPath, centralPath } from "./central-path.js";
@@ -195,7 +195,8 @@ function runBoth(
   const future = gatherer({ ...shared, kind: "future observation", keepProcess: keep && !alike });
   const draws = change.map((noise) => noise && noiseDraw(noise));
   const bounds = runBounds(rule, draws);
-  const half = (part: number) => (done: number, of: number) => options.onProgress?.(part * of + done, 2 * of);
+  const report = reporter(options);
+  const half = (part: number) => (done: number, of: number) => report(part * of + done, 2 * of);
   const none = rule.states.map(() => undefined);
   const run: Omit<EnsembleRun, "change" | "reading" | "onRow"> = {
     compiled: ground.compiled,
@@ -216,6 +217,8 @@ function runBoth(
     reading: reading.map((noise) => noise && noiseDraw(noise)),
     factors: starts.factors,
     spread: starts.spread,
+    // Those that a decision meets, which draws its starts once and runs many settings from there.
+    streams: streams.map((each) => each.jump()),
     onRow: future.onRow,
     onProgress: half(1),
   });

@@ -16,13 +16,33 @@ import {
  */
 export type Level =
   | number
-  | { readonly share: number; readonly of: string }
-  | { readonly logs: number; readonly of: string };
+  | {
+      /** Share of it. */
+      readonly share: number;
+      /** Parameter or first value that the level is relative to. */
+      readonly of: string;
+    }
+  | {
+      /** How many powers of ten from it. */
+      readonly logs: number;
+      /** Parameter or first value that the level is relative to. */
+      readonly of: string;
+    };
 
 /** A level that is to be reached from below (`risesTo`) or from above (`fallsTo`). */
 export type CrossedLevel =
-  | { readonly risesTo: Level; readonly fallsTo?: never }
-  | { readonly fallsTo: Level; readonly risesTo?: never };
+  | {
+      /** Level that is risen to, from below: a number, or relative to a parameter. */
+      readonly risesTo: Level;
+      /** Level that is fallen to, from above: a number, or relative to a parameter. */
+      readonly fallsTo?: never;
+    }
+  | {
+      /** Level that is fallen to, from above: a number, or relative to a parameter. */
+      readonly fallsTo: Level;
+      /** Level that is risen to, from below: a number, or relative to a parameter. */
+      readonly risesTo?: never;
+    };
 
 /** A level with the side from which it is reached: 1 where values rise to it, -1 where they fall to it. */
 export interface LevelSide {

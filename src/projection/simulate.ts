@@ -9,7 +9,7 @@ import {
   runStart,
   type StartOptions,
 } from "../dynamics/index.js";
-import { randomStream } from "../numeric/index.js";
+import { type RunHooks, randomStream, reporter } from "../numeric/index.js";
 import { labelsAt, type PeriodAxis, periodWords } from "../record/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../rule/index.js";
 import { centralPath, type Ground } from "./central-path.js";
@@ -28,30 +28,29 @@ import { rangeWarnings } from "./range-warnings.js";
 import { observableRange, runBounds } from "./state-range.js";
 
 /** Options of `simulate`. */
-export interface SimulateOptions extends StartOptions {
-  /** By parameter; those the rule holds fixed may be left out. */
+export interface SimulateOptions extends StartOptions, RunHooks {
+  /** Parameters by name; those that the rule holds fixed may be left out. */
   readonly parameters?: Readonly<Record<string, number>>;
-  /** By state; those the rule states may be left out. With lags a list, oldest first. */
+  /** First values by state, with lags a list, oldest first; those that the rule states may be left out. */
   readonly initial?: InitialValues;
+  /** Whole periods to run. */
   readonly periods: number;
   /** By input: what it will be, from the first period on. */
   readonly inputs?: InputPlans;
-  /** Several plans of inputs side by side, run with the same random numbers. */
+  /** Several plans of inputs side by side, by the name of the scenario, run with the same random numbers. */
   readonly scenarios?: Scenarios;
   /** By state: the random change of each period; default what the rule says. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** By state: the error of an observation, reported and not carried on. */
+  /** By state: the observation error, which is reported and not carried on. */
   readonly observationNoise?: Readonly<Record<string, Noise>>;
-  /** Default 4000, or 1 where nothing is random. */
+  /** Random paths; default 4000, or 1 where nothing is random. */
   readonly paths?: number;
-  /** Levels of the bands; default 0.5, 0.8, 0.95. */
+  /** Levels of the bands, each between 0 and 1; default [0.5, 0.8, 0.95]. */
   readonly levels?: readonly number[];
-  /** Seed of the draws; default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
-  /** Values whose first passage is followed, for more paths than can be kept. */
+  /** Levels whose first passage is followed, for runs with more paths than can be kept. */
   readonly watch?: readonly Watch[];
-  /** Called now and then with what is done; what it throws ends the run. */
-  readonly onProgress?: (done: number, of: number) => void;
 }
 
 /** Paths of a rule at given parameters, with bands across them. */
@@ -167,7 +166,7 @@ function simulated(
     quantities: keep || watches.some(({ place }) => place >= states) ? quantities : 0,
     streams: blockStreams(randomStream(options.seed), paths),
     onRow: found.onRow,
-    onProgress: options.onProgress,
+    onProgress: reporter(options),
   });
   const gathered = found.states();
   const index = Array.from({ length: periods + 1 }, (_, t) => from + t);

@@ -12,11 +12,20 @@ import { leftWords, signNotes } from "./solve-notes.js";
 
 /** Options of `tradeoff`. */
 export interface TradeoffOptions extends DecisionOptions {
-  /** A parameter, a first value such as "N[0]", or an input whose usual level is chosen. */
+  /** What is varied: a parameter, a first value such as "N[0]", or an input, whose usual level is set. */
   readonly vary: string;
-  /** Settings to look at: a list, or two ends with how many. */
-  readonly values: readonly number[] | { readonly from: number; readonly to: number; readonly count: number };
-  /** What each setting brings, by the name it is shown under. */
+  /** Values to look at: a list, or two ends with how many. */
+  readonly values:
+    | readonly number[]
+    | {
+        /** First value. */
+        readonly from: number;
+        /** Last value. */
+        readonly to: number;
+        /** How many values, ends included. */
+        readonly count: number;
+      };
+  /** What each value brings: measures by the name they are shown under. */
   readonly answers: Readonly<Record<string, Measure>>;
 }
 

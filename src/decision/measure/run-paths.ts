@@ -11,7 +11,6 @@ import {
   runBounds,
   runEnsemble,
   type Starts,
-  type UnknownsDraw,
   unknownsDraw,
 } from "../../projection/index.js";
 import type { DecisionContext } from "../setting/decision-context.js";
@@ -53,20 +52,18 @@ type RunStarts = Starts & Pick<EnsembleRun, "spread">;
  * @param quantities - whether quantities are read as well.
  */
 export function pathRunner(context: DecisionContext, kind: PathKind, quantities: boolean): PathRunner {
-  const { rule, fit, fitGround } = context;
-  const drawn = fit !== undefined && kind !== "estimates";
-  const source = drawn ? unknownsDraw(fit, fitGround!.group) : undefined;
+  const { rule, ground } = context;
   const paths = kind === "estimates" ? 1 : kind === "chance" ? context.paths : kind.draws * kind.each;
+  const begin = beginnings(context, kind, paths);
   return (follow, choice) => {
-    const streams = blockStreams(context.stream(), paths).map((each) => (drawn ? each.jump() : each));
-    const starts = source === undefined ? sharedStarts(context.ground, paths) : drawnFor(source, streams);
+    const { starts, streams } = begin();
     const { inputs, from, periods, initial, compiled } = groundAt(context, choice);
-    const held = withChoice(starts, context.ground, choice);
+    const held = withChoice(starts, ground, choice);
     const own = (held.ahead?.parameters ?? held.parameters).subarray(0, starts.size);
     const change = context
-      .changeAt(source === undefined ? own : context.ground.parameters)
+      .changeAt(own)
       .map((noise) => (noise === undefined || !isMoved(kind) ? undefined : noiseDraw(noise)));
-    const levels = levelSource(context.ground, held, held.ahead?.parameters);
+    const levels = levelSource(ground, held, held.ahead?.parameters);
     runEnsemble({
       compiled,
       bounds: runBounds(rule, change),
@@ -84,15 +81,28 @@ export function pathRunner(context: DecisionContext, kind: PathKind, quantities:
       onRow: follow({ levels, paths, changedFrom: held.ahead?.row ?? 0 }),
     });
   };
-
-  function drawnFor(of: UnknownsDraw, streams: readonly RandomStream[]): RunStarts {
-    if (typeof kind === "string") return drawnStarts(fit!, fitGround!, of, paths, streams);
-    return repeated(drawnStarts(fit!, fitGround!, of, kind.draws, streams), kind.each);
-  }
 }
 
-function sharedStarts(ground: Ground, paths: number): RunStarts {
-  return { ...ground, paths, size: ground.parameters.length };
+interface Beginnings {
+  readonly starts: RunStarts;
+  readonly streams: readonly RandomStream[];
+}
+
+/** Where the paths of every run begin, and the random numbers that they then meet: always the same. */
+function beginnings(context: DecisionContext, kind: PathKind, paths: number): () => Beginnings {
+  const { fit, fitGround, ground } = context;
+  if (fit === undefined || fitGround === undefined || kind === "estimates") {
+    const starts = { ...ground, paths, size: ground.parameters.length };
+    return () => ({ starts, streams: blockStreams(context.stream(), paths) });
+  }
+  const source = unknownsDraw(fit, fitGround.group);
+  const streams = blockStreams(context.stream(), paths).map((each) => each.jump());
+  const starts =
+    kind === "chance"
+      ? drawnStarts(fit, fitGround, source, paths, streams)
+      : repeated(drawnStarts(fit, fitGround, source, kind.draws, streams), kind.each);
+  // A jump leaves the stream where it is, so every run meets the same numbers.
+  return () => ({ starts, streams: streams.map((each) => each.jump()) });
 }
 
 /** Starts with what is chosen put into every row, from the present on; what is chosen is no longer drawn. */

@@ -4,11 +4,14 @@ import type { DeltaMargin } from "./delta-margin.js";
 
 /** The question: when does a state rise or fall to a level? */
 export type TimeToReachOptions = CrossedLevel & {
-  /** A state or quantity; default the first state. */
+  /** Name of a state or quantity; default the first state. */
   readonly state?: string;
-  /** Level of the interval; default 0.95. */
+  /** Confidence level of the interval, between 0 and 1; default 0.95. */
   readonly level?: number;
-  /** Say as well when a new unit would get there, the variance between units added; from three groups on. */
+  /**
+   * Whether to say as well when a new unit would get there, the variance between units added; from three
+   * groups on; default false.
+   */
   readonly newUnit?: boolean;
 };
 

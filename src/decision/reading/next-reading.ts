@@ -1,5 +1,5 @@
 import type { Fit } from "../../estimate/index.js";
-import { randomStream } from "../../numeric/index.js";
+import { type RunHooks, randomStream, ticker } from "../../numeric/index.js";
 import { placeOf } from "../../projection/index.js";
 import type { PeriodAxis } from "../../record/index.js";
 import { noCandidateError, noPurposeError, probabilityAnswerError } from "../errors.js";
@@ -13,29 +13,36 @@ import { separationAt } from "./separation.js";
 import { type SimulatedReadings, simulatedReadings } from "./simulated-readings.js";
 
 /** Options of `nextReading`. */
-export interface NextReadingOptions {
+export interface NextReadingOptions extends RunHooks {
   /** Periods beyond the record up to which a reading could be taken, and up to which the answer looks. */
   readonly periods: number;
   /**
-   * Periods at which it could be taken, by number or label: a list, or two ends; default every period after the
-   * record. Periods within the record are looked at only where they are given here, as for samples that were kept.
+   * Periods at which it could be taken, by number or label: a list, or two ends; default every period from
+   * the first on.
    */
   readonly values?:
     | readonly (number | string)[]
-    | { readonly from: number | string; readonly to: number | string };
-  /** The answer whose margin is to be narrowed; needed for a single fit. */
+    | {
+        /** First period, by number or label. */
+        readonly from: number | string;
+        /** Last period, by number or label. */
+        readonly to: number | string;
+      };
+  /** Measure whose margin is to be narrowed; needed for a single fit. */
   readonly answer?: Measure;
   /** What is read; default the first state. */
   readonly state?: string;
-  /** Readings taken at the same time; default 1. They count where the error is one of observation. */
+  /** Readings taken at the same time; they count where the error is one of observation; default 1. */
   readonly replicates?: number;
-  /** Cost of a reading at a time, in any unit; the gain is then weighed by it. Default the same everywhere. */
+  /**
+   * Cost of a reading at a time, in any unit; the gain is then weighed by it; default the same everywhere.
+   */
   readonly cost?: (time: number) => number;
-  /** Of fits with several groups: which one. */
+  /** Of a fit or a record with several groups: which one. */
   readonly group?: string;
-  /** Drawn parameters; default 1000. */
+  /** Parameter values drawn; default 1000. */
   readonly paths?: number;
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
 }
 
@@ -102,7 +109,10 @@ export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOpti
     answer === undefined ? separationLook(rivals, seed) : narrowingLook(rivals[0]!, answer, draws, seed);
   const event = eventTime(rivals[0]!, answer);
   const end = context.timeAt(context.ground.present);
-  const choices = candidates(rivals, options.values).map(({ time, rows }): ReadingChoice => {
+  const times = candidates(rivals, options.values);
+  const tick = ticker(options, times.length);
+  const choices = times.map(({ time, rows }): ReadingChoice => {
+    tick();
     const { gain, error, telling } = look(rows);
     const price = cost(time);
     const late = event !== undefined && time > event;

@@ -10,7 +10,7 @@ import {
   type StartOptions,
 } from "../../dynamics/index.js";
 import { type Fit, type GroupFit, problemOf } from "../../estimate/index.js";
-import { type RandomStream, randomStream } from "../../numeric/index.js";
+import { type RandomStream, type RunHooks, randomStream, type Tick, ticker } from "../../numeric/index.js";
 import {
   centralLevels,
   type FitGround,
@@ -28,21 +28,22 @@ import type { MeasureUnits } from "../measure/measure-words.js";
 import { withinError } from "../words/amount.js";
 
 /** What a decision is worked out from, beside the rule or fit itself. */
-export interface DecisionOptions extends StartOptions {
+export interface DecisionOptions extends StartOptions, RunHooks {
   /** Whole periods ahead. */
   readonly periods: number;
-  /** By input: its plan. For a fit the first period ahead comes first, for a rule period 0. */
+  /** By input: what it will be, by the periods of the record or of the run. */
   readonly inputs?: InputPlans;
   /** Of a fit or a record with several groups: which one. */
   readonly group?: string;
-  /** Of a rule: its parameters and first values. */
+  /** Of a rule: its parameters by name. */
   readonly parameters?: Readonly<Record<string, number>>;
+  /** Of a rule: its first values by state. */
   readonly initial?: InitialValues;
-  /** Of a rule: random change by state; every measure is then one of the paths' distribution. */
+  /** Of a rule: random change by state, for probabilities. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** Paths where chance has a part; default 4000. */
+  /** Random paths for probabilities and margins; default 2000. */
   readonly paths?: number;
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
 }
 
@@ -67,9 +68,15 @@ export interface DecisionContext extends MeasureUnits {
   readonly seed: number;
   /** Random numbers of the question, the same at every call: those of a forecast or simulation with this seed. */
   readonly stream: () => RandomStream;
+  /** Called before each run of the rule. */
+  readonly tick: Tick;
   /** The ground under other plans of inputs. */
   readonly planned: (plans: InputPlans) => Ground;
 }
+
+/** Runs that an answer takes, roughly: a place in the range each, and for a fit some at every draw of its parameters. */
+const runsOfRule = 100;
+const runsOfFit = 5000;
 
 /** Whether a subject is a fit. */
 export const isFit = (subject: Fit | Rule): subject is Fit => subject.kind === "fit";
@@ -119,6 +126,7 @@ function fitContext(fit: Fit, options: DecisionOptions): OwnContext {
         (own) => own.jump(),
         randomStream(options.seed ?? 1),
       ),
+    tick: ticker(options, runsOfFit),
     planned,
     unitOf: (name) => {
       const state = stateOf(name);
@@ -164,6 +172,7 @@ function ruleContext(rule: Rule, options: DecisionOptions): OwnContext {
     plans: options.inputs ?? {},
     changeAt: (at) => ruleNoise(rule, at, options.noise),
     stream: () => randomStream(options.seed ?? 1),
+    tick: ticker(options, runsOfRule),
     planned,
     unitOf: (name) => rule.units[stateOf(name)] ?? "",
     periodUnit: axis.unit,

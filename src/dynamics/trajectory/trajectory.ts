@@ -15,10 +15,17 @@ import { namedValues, refuseOutsideRange } from "../setting/valid-range.js";
 import { type BoundedPath, boundedPath, type PathRun } from "./bounded-path.js";
 
 export interface TrajectoryOptions extends StartOptions {
-  /** By parameter; those the rule holds fixed may be left out. */
+  /**
+   * Parameters by name; those that the rule holds fixed may be left out, and those of a fit are its
+   * estimates.
+   */
   readonly parameters?: Readonly<Record<string, number>>;
-  /** By state; those the rule states may be left out. */
+  /**
+   * First values by state, with lags a list, oldest first; those that the rule states or the fit estimates
+   * may be left out.
+   */
   readonly initial?: InitialValues;
+  /** Whole periods to run. */
   readonly periods: number;
   /** By input: what it will be, from the first period on. */
   readonly inputs?: InputPlans;

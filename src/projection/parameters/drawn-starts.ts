@@ -6,8 +6,8 @@ import { blockSize } from "../ensemble/block-streams.js";
 import type { Starts } from "../ensemble/ensemble.js";
 import type { FitGround } from "../fit-ground.js";
 import { refuseNoDraws, refuseUndetermined } from "../refusals.js";
-import { drawAlongProfile, loosest } from "./draw-along-profile.js";
-import { type ParametersDraw, parametersDraw } from "./draw-parameters.js";
+import { drawAlongProfile, loosest, mostBent } from "./draw-along-profile.js";
+import { type DrawnUnknowns, type ParametersDraw, parametersDraw, recordRatio } from "./draw-parameters.js";
 
 /** How parameters were drawn: around the estimates, or along the profile of what the record leaves open. */
 export type DrawMethod = "around the estimates" | "along the profile";
@@ -35,27 +35,45 @@ export interface UnknownsDraw {
 /** Draws thrown away for each one kept, at most. */
 const patience = 200;
 
+/** Up to which ratio draws that the record finds likelier than they are drawn are made up for, by keeping fewer others. */
+const largestRatio = 2;
+
+/** Draws after which the record's doubts about them are let be. */
+const mostTries = 40;
+
 /**
  * The draw that a group's record allows. Standard deviations and dispersions stay at their estimates: what the record
  * leaves open of the two errors of a state space it does not leave open of their sum, which is what a band rests on.
  */
 export function unknownsDraw(fit: Fit, group: GroupFit): UnknownsDraw {
+  const known = drawn.get(group) ?? drawOf(fit, group);
+  drawn.set(group, known);
+  return known;
+}
+
+/** Following a profile takes some fifty fits, and one fit is asked many questions. */
+const drawn = new WeakMap<GroupFit, UnknownsDraw>();
+
+function drawOf(fit: Fit, group: GroupFit): UnknownsDraw {
   const together = problemOf(fit).groups !== "separate";
   const loose = together ? undefined : loosest(group);
   if (loose !== undefined) {
     const draw = drawAlongProfile(fit, group, loose);
-    if (draw === undefined) throw refuseUndetermined(group.group, openNames(group));
+    if (draw === undefined) throw undetermined(group);
     return { draw, method: "along the profile", followed: loose.name };
   }
-  const drawn = group.estimates.flatMap(({ role }, i) => (role === "scale" ? [] : [i]));
+  const bent = together ? undefined : mostBent(group);
+  const along = bent && drawAlongProfile(fit, group, bent);
+  if (along !== undefined) return { draw: along, method: "along the profile", followed: bent!.name };
+  const free = group.estimates.flatMap(({ role }, i) => (role === "scale" ? [] : [i]));
   const size = group.estimates.length;
   const draw = parametersDraw(
     Float64Array.from(group.estimates, (estimate) => estimate.value),
-    drawn,
-    Float64Array.from(drawn.flatMap((i) => drawn.map((j) => group.covariance[i * size + j]!))),
+    free,
+    Float64Array.from(free.flatMap((i) => free.map((j) => group.covariance[i * size + j]!))),
     group.degreesOfFreedom,
   );
-  if (draw === undefined) throw refuseUndetermined(group.group, openNames(group));
+  if (draw === undefined) throw undetermined(group);
   return { draw, method: "around the estimates", followed: undefined };
 }
 
@@ -65,7 +83,7 @@ interface DrawnRow {
   readonly initial: Float64Array;
 }
 
-/** Draws a start for every path; one that cannot be meant is drawn again. */
+/** Draws a start for every path; one that cannot be meant, or that the record finds unlikely, is drawn again. */
 export function drawnStarts(
   fit: Fit,
   ground: FitGround,
@@ -80,6 +98,9 @@ export function drawnStarts(
   const unknowns = new Float64Array(ground.group.estimates.length);
   const stands = standsOf(fit, ground);
   const begin = beginning(ground);
+  const { increase, findsSigma } = problemOf(fit).group(ground.group.group);
+  const { degreesOfFreedom, estimates } = ground.group;
+  const free = estimates.filter(({ role }) => role !== "scale").length;
   const spread = new Float64Array(paths);
   const factors = ground.factors.map((factor) => factor && new Float64Array(paths));
   let discarded = 0;
@@ -89,28 +110,37 @@ export function drawnStarts(
       parameters: parameters.subarray(path * size, (path + 1) * size),
       initial: initial.subarray(path * width, (path + 1) * width),
     };
-    spread[path] = drawOne(stream, own);
-    while (!stands(unknowns, own)) {
-      if (++discarded > patience * (path + 1)) throw refuseNoDraws(ground.group.group);
-      spread[path] = drawOne(stream, own);
+    let drawn = drawOne(stream, own);
+    for (let tries = 0; !stands(unknowns, own) || !isLikely(drawn, stream, tries); tries++) {
+      if (!stands(unknowns, own) && ++discarded > patience * (path + 1))
+        throw refuseNoDraws(ground.group.group);
+      drawn = drawOne(stream, own);
     }
+    spread[path] = drawn.sigma;
     ground.factors.forEach((factor, s) => {
       if (factor !== undefined) factors[s]![path] = unknowns[factor.unknown]!;
     });
   }
   const { method, followed } = source;
-  const sigma = problemOf(fit).group(ground.group.group).findsSigma ? spread : undefined;
+  const sigma = findsSigma ? spread : undefined;
   return { paths, size, parameters, initial, method, followed, spread: sigma, factors, discarded };
 
-  function drawOne(stream: RandomStream, own: DrawnRow): number {
-    const widened = source.draw(stream, unknowns);
+  function drawOne(stream: RandomStream, own: DrawnRow): DrawnUnknowns {
+    const drawn = source.draw(stream, unknowns);
     own.parameters.set(ground.parameters);
     own.initial.set(begin(stream));
     ground.places.forEach((place, i) => {
       if (place >= size) own.initial[place - size] = unknowns[i]!;
       else if (place >= 0) own.parameters[place] = unknowns[i]!;
     });
-    return widened;
+    return drawn;
+  }
+
+  /** Keeps a draw as often as the record finds it likely; where hardly any is, the next that stands. */
+  function isLikely(drawn: DrawnUnknowns, stream: RandomStream, tries: number): boolean {
+    if (increase === undefined || tries >= mostTries) return true;
+    const ratio = recordRatio(increase(unknowns), drawn, degreesOfFreedom, free, findsSigma);
+    return stream.uniform() < ratio / largestRatio;
   }
 }
 
@@ -145,6 +175,14 @@ function standsOf(fit: Fit, ground: FitGround): (unknowns: Float64Array, own: Dr
     limits.every(([low, high], i) => unknowns[i]! >= low && unknowns[i]! <= high) && (!looked || stays(own));
 }
 
-function openNames(group: GroupFit): readonly string[] {
-  return group.estimates.filter((each) => each.standardError === undefined).map((each) => each.name);
+function undetermined({ group, estimates }: GroupFit): Error {
+  const open = estimates.filter(
+    ({ standardError, role }) => standardError === undefined && role === "parameter",
+  );
+  const twoErrors = estimates.some(({ name }) => name.startsWith("observation error"));
+  return refuseUndetermined(
+    group,
+    open.map(({ name }) => name),
+    twoErrors,
+  );
 }

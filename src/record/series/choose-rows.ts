@@ -17,8 +17,11 @@ export type RowCondition =
 
 /** Rows of the record by number, 1 for the first below the header; both ends are included. */
 export interface RowRange {
+  /** First row; default 1. */
   readonly from?: number;
+  /** Last row; default the last one of the record. */
   readonly until?: number;
+  /** Rows to leave out. */
   readonly except?: number | readonly number[];
 }
 
