@@ -84,7 +84,7 @@ describe("inspection", () => {
     const told = await about("recurr|ence");
     expect(told).toMatch(/^```typescript\n.*function recurrence\(text: string/s);
     expect(told).toContain("Reads a rule of change from text");
-    expect(await about("expl|ain")).toContain("*param* name");
+    expect(await about("expl|ain")).toContain("*param* word");
   });
 
   test("at detail level 1 adds errors and an example", async () => {
