@@ -30,7 +30,7 @@ export function toFrame(record: ColumnTable): DataFrame {
   return frame;
 }
 
-/** danfo guesses the kind of a column from its first rows; here every cell is checked. */
+/** danfo infers the kind of a column from its first rows; here every cell is checked. */
 function kindOf(column: Column): string {
   if (column instanceof Float64Array) return "float32";
   const cells = column.filter((cell) => cell !== null && cell !== undefined);
