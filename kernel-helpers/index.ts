@@ -58,7 +58,7 @@ export type {
   ProposeOptions,
   SameParameters,
 } from "../src/evidence/index.js";
-export { leastSquares, ModelError } from "../src/numeric/index.js";
+export { ModelError } from "../src/numeric/index.js";
 export type {
   ForecastOptions,
   SimulateOptions,
@@ -99,6 +99,8 @@ export {
 export { type Explanation, explain } from "./functions/explain.js";
 export { estimates, fit, points, summary } from "./functions/fits.js";
 export { expanding, fill, longer, rolling, shift, toPeriods, wider } from "./functions/frames.js";
+export { leastSquares } from "./functions/least-squares.js";
+export { numberFormat } from "./functions/number-format.js";
 export { forecast, simulate } from "./functions/projections.js";
 export { propose } from "./functions/proposals.js";
 export {
@@ -135,7 +137,6 @@ export type {
 } from "./results/index.js";
 export {
   type NumberFormat,
-  numberFormat,
   type Table,
   type TableOptions,
   table,

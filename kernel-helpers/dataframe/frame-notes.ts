@@ -1,6 +1,7 @@
 import type { DataFrame } from "danfojs-node";
 import type { Decision } from "../../src/record/index.js";
 import type { RecordSource } from "../../src/store/index.js";
+import { checkCall } from "../options/index.js";
 
 /** What is known of a frame besides its cells; kept beside it, so that no column or option is spent on it. */
 export interface FrameNotes {
@@ -29,5 +30,6 @@ export function notesOf(frame: object): FrameNotes {
  * @returns undefined for a frame that was not read from a file, or was made from one that was.
  */
 export function sourceOf(frame: DataFrame): RecordSource | undefined {
+  checkCall("sourceOf", arguments);
   return notesOf(frame).source;
 }

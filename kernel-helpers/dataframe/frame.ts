@@ -3,6 +3,7 @@ import { estimates, type Fit, points, summary } from "../../src/estimate/index.j
 import type { Differences } from "../../src/record/index.js";
 import { tableOfRows } from "../../src/record/index.js";
 import type { NamedTable } from "../../src/store/index.js";
+import { checkCall } from "../options/index.js";
 import { columnsOf, type RecordLike } from "./columns-of.js";
 import { isFrame } from "./danfo.js";
 import { resultTables } from "./result-tables.js";
@@ -35,6 +36,7 @@ export function frame(result: Result): Readonly<Record<string, DataFrame>>;
 export function frame(
   value: RecordLike | Result,
 ): DataFrame | FitFrames | Readonly<Record<string, DataFrame>> {
+  checkCall("frame", arguments);
   if (isFrame(value)) return value;
   const tables = tablesOf(value);
   const [only] = tables;

@@ -1,5 +1,6 @@
 import { frozenCopy } from "../../src/numeric/index.js";
 import type { PeriodAxis } from "../../src/record/index.js";
+import { checkCall } from "../options/index.js";
 import { type Bundle, showing, type Table } from "../tables/index.js";
 import { figureBundle } from "./figure-bundle.js";
 import type { Layer } from "./layer.js";
@@ -7,25 +8,39 @@ import { emptyFigure } from "./refusals.js";
 
 /** An axis: what it measures and in what unit. */
 export interface Axis {
+  /** What the axis measures. */
   readonly title: string;
-  /** "" or absent = none. */
+  /** Its unit; default "" (none). */
   readonly unit?: string;
-  /** Default "linear"; "category" for names, "date" for calendar dates as ISO text. */
+  /**
+   * How places lie along it: "category" for names, "date" for calendar dates as ISO text; default "linear".
+   */
   readonly scale?: "linear" | "log" | "category" | "date";
-  /** Ends of the axis, in its unit; default: what the layers need. */
+  /** Ends of the axis, in its unit; default what the layers need. */
   readonly ends?: readonly [number, number];
   /** The periods that places on the axis stand for, where these have labels; `zero` is the place of period 0. */
-  readonly periods?: { readonly axis: PeriodAxis; readonly zero: number };
-  /** Without ticks and grid: where places along the axis have no meaning of their own. */
+  readonly periods?: {
+    /** Axis of the periods. */
+    readonly axis: PeriodAxis;
+    /** Place of period 0. */
+    readonly zero: number;
+  };
+  /**
+   * Whether it has no ticks and grid: where places along the axis have no meaning of their own; default
+   * false.
+   */
   readonly bare?: boolean;
 }
 
 /** One set of axes with what is drawn on it, in drawing order. */
 export interface Panel {
-  /** "" for the only panel of a figure. */
+  /** Title of the panel; "" for the only one of a figure. */
   readonly title: string;
+  /** Horizontal axis. */
   readonly x: Axis;
+  /** Vertical axis. */
   readonly y: Axis;
+  /** What is drawn, in drawing order. */
   readonly layers: readonly Layer[];
 }
 
@@ -43,13 +58,21 @@ export interface Figure {
 
 /** What `figure` takes: one panel's axes and layers, or several panels. */
 export interface FigureOptions {
+  /** Title of the figure. */
   readonly title: string;
+  /** Horizontal axis of the only panel. */
   readonly x?: Axis;
+  /** Vertical axis of the only panel. */
   readonly y?: Axis;
+  /** What is drawn on the only panel, in drawing order. */
   readonly layers?: readonly Layer[];
+  /** Several panels, in place of `x`, `y` and `layers`. */
   readonly panels?: readonly Panel[];
+  /** One or two sentences that say in words what the figure shows. */
   readonly summary?: string;
+  /** What stands below the figure. */
   readonly notes?: readonly string[];
+  /** Tables shown as the numbers behind the figure; default what is drawn. */
   readonly numbers?: readonly Table[];
 }
 
@@ -62,6 +85,7 @@ export interface FigureOptions {
  *   layers: [{ mark: "points", name: "counted", x: [0, 1], y: [90, 83] }] });
  */
 export function figure(options: FigureOptions): Figure {
+  checkCall("figure", arguments);
   // Copies: the caller's lists must not be frozen, nor change the figure later.
   const { title, x, y, layers, panels: given, summary = "", notes = [], numbers } = frozenCopy(options);
   const panels = given ?? (x && y && layers ? [{ title: "", x, y, layers }] : []);

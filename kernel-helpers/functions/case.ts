@@ -1,4 +1,5 @@
 import { libraryAgain, warmPictures } from "../figures/index.js";
+import { checkCall } from "../options/index.js";
 import { type Bundle, escapeHtml, look, showing, superscript, typeface, untypeset } from "../tables/index.js";
 import { type CaseHead, caseLog, defaultSeed } from "./case-log.js";
 import { cautionOf, type Domain, domainCautions } from "./cautions.js";
@@ -9,11 +10,13 @@ import { shownTogether } from "./shown-together.js";
 
 /** What a case begins with. */
 export interface CaseOptions {
+  /** Title of the case. */
   readonly title: string;
-  /** In the client's words. */
+  /** The question, in the client's words. */
   readonly question: string;
+  /** Field of the case, which decides the caution that is printed. */
   readonly domain: Domain;
-  /** Seed of every draw in the notebook; without it 1, which is shown. */
+  /** Seed of every random number in the notebook, a whole number; it is shown; default 1. */
   readonly seed?: number;
   /** Date of the case, printed as given. */
   readonly date?: string;
@@ -26,6 +29,7 @@ export interface CaseOptions {
  * @example openCase({ title: "Algae line 3", question: "When can it be drawn down?", domain: "cultures", seed: 7 });
  */
 export function openCase(options: CaseOptions): void {
+  checkCall("openCase", arguments);
   const known = Object.keys(domainCautions);
   if (!known.includes(options.domain)) throw refuseUnknownDomain(options.domain, known);
   const head: CaseHead = { ...options, seed: options.seed ?? defaultSeed };
@@ -59,6 +63,7 @@ export function openCase(options: CaseOptions): void {
  * @example answer(`Draw down at hour 138. ${ready.sentence}`);
  */
 export function answer(said: string): void {
+  checkCall("answer", arguments);
   const sentence = superscript(said);
   if (caseLog.head() === undefined) throw refuseNoCase("answer(...)");
   if (sentence.trim() === "") throw refuseEmptyAnswer();
@@ -91,6 +96,7 @@ function answerParts(answer: string): string {
  * @example closeCase();
  */
 export function closeCase(): void {
+  checkCall("closeCase", arguments);
   const head = caseLog.head();
   if (head === undefined) throw refuseNoCase("closeCase()");
   if (caseLog.answers().length === 0) throw refuseUnanswered();

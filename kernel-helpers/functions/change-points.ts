@@ -6,15 +6,16 @@ import {
   changePoint as findChangePoint,
   densityDependence as testDensity,
 } from "../../src/evidence/index.js";
-import { frozenCopy } from "../../src/numeric/index.js";
 import type { Observations } from "../../src/record/index.js";
 import { type Rule, ruleLabel } from "../../src/rule/index.js";
 import { type Figure, figure, type Panel } from "../figures/index.js";
+import { checkCall } from "../options/index.js";
 import type { ChangePoint } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { acrossGroup, periodColumn } from "./across-periods.js";
 import { caseLog } from "./case-log.js";
 import { cautionsByGroup } from "./cautions-by-group.js";
+import { seededRun } from "./seeded-run.js";
 import { presentFitIn } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
 
@@ -31,7 +32,10 @@ export function changePoint(
   observations: Observations,
   options: ChangePointOptions = {},
 ): ChangePoint {
-  const looked = findChangePoint(rule, observations, { seed: caseLog.seed(), ...frozenCopy(options) });
+  checkCall("changePoint", arguments);
+  const looked = seededRun("Records without a break", options, (own) =>
+    findChangePoint(rule, observations, own),
+  );
   caseLog.noteStep(`looked for a break in "${ruleLabel(rule)}": ${looked.sentence}`);
   return showing(presentFitIn(looked), () => shownTogether([breaksTable(looked), breaksFigure(looked)]));
 }
@@ -47,7 +51,8 @@ export function densityDependence(
   observations: Observations,
   options: DensityOptions = {},
 ): DensityDependence {
-  const tested = testDensity(observations, { seed: caseLog.seed(), ...frozenCopy(options) });
+  checkCall("densityDependence", arguments);
+  const tested = seededRun("Records drawn", options, (own) => testDensity(observations, own));
   caseLog.noteStep(`tested density dependence: ${tested.sentence}`);
   return showing(tested, () => shownTogether([densityTable(tested)]));
 }

@@ -1,12 +1,13 @@
 import type { Fit } from "../../src/estimate/index.js";
 import { type CheckOptions, check as checkFit, type Check as EngineCheck } from "../../src/evidence/index.js";
-import { frozenCopy } from "../../src/numeric/index.js";
 import { ruleLabel } from "../../src/rule/index.js";
+import { checkCall } from "../options/index.js";
 import type { Check } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { periodColumn } from "./across-periods.js";
 import { caseLog } from "./case-log.js";
 import { residualPanels } from "./residual-panels.js";
+import { seededRun } from "./seeded-run.js";
 import { presentFitIn } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
 
@@ -19,7 +20,8 @@ import { shownTogether } from "./shown-together.js";
  * @example check(fit(crowding, counts, { errors: "observation" })).sentence;
  */
 export function check(fit: Fit, options: CheckOptions = {}): Check {
-  const checked = checkFit(fit, { seed: caseLog.seed(), ...frozenCopy(options) });
+  checkCall("check", arguments);
+  const checked = seededRun("Checks", options, (own) => checkFit(fit, own));
   caseLog.noteStep(`checked "${ruleLabel(fit.rule)}": ${checked.sentence}`);
   return showing(presentFitIn(checked), () =>
     shownTogether([

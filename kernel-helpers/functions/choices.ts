@@ -10,10 +10,11 @@ import {
   tradeoff as tradeoffOf,
 } from "../../src/decision/index.js";
 import type { Fit } from "../../src/estimate/index.js";
-import { frozenCopy } from "../../src/numeric/index.js";
 import type { Rule } from "../../src/rule/index.js";
+import { checkCall } from "../options/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { seededRun } from "./seeded-run.js";
 import { showBest, showSensitivity, showTradeoff } from "./show-choices.js";
 import { shownTogether } from "./shown-together.js";
 
@@ -27,20 +28,22 @@ import { shownTogether } from "./shown-together.js";
  *   maximize: { level: "catch", at: 100 } }).atEnd // false
  */
 export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum {
-  const found = bestSetting(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
+  checkCall("optimize", arguments);
+  const found = seededRun("Optimum", options, (own) => bestSetting(subject, own));
   caseLog.noteStep(`asked which ${found.vary} is best for ${found.measure}`);
   return showing(found, () => shownTogether(showBest(found)));
 }
 
 /**
- * What an answer hangs on: its change for one standard error and for ten per cent of each parameter, in two charts,
+ * What an answer is sensitive to: its change for one standard error and for ten per cent of each parameter, in two charts,
  * and the elasticities.
  *
  * @example sensitivity(fitted, { periods: 12, answer: { time: "N", risesTo: 600 } }).rows.length // 3
  */
 export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): Sensitivity {
-  const found = sensitivityOf(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
-  caseLog.noteStep(`asked what ${found.measure} hangs on`);
+  checkCall("sensitivity", arguments);
+  const found = seededRun("Sensitivity", options, (own) => sensitivityOf(subject, own));
+  caseLog.noteStep(`asked how sensitive ${found.measure} is`);
   return showing(found, () => shownTogether(showSensitivity(found)));
 }
 
@@ -53,7 +56,8 @@ export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): S
  *   answers: { lowest: { lowest: "stock" } } }).rows[0].answers.lowest // 12
  */
 export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeoff {
-  const found = tradeoffOf(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
+  checkCall("tradeoff", arguments);
+  const found = seededRun("Choices", options, (own) => tradeoffOf(subject, own));
   caseLog.noteStep(`set ${found.rows.length} choices of ${found.vary} side by side`);
   return showing(found, () => shownTogether(showTradeoff(found)));
 }

@@ -1,5 +1,7 @@
 import { type Comparison, compare as compareFits, type RollingOrigin } from "../../src/evidence/index.js";
 import { frozenCopy } from "../../src/numeric/index.js";
+import { checkCall } from "../options/index.js";
+import { runShown } from "../progress/index.js";
 import type { CompareOptions, Fit } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
@@ -10,24 +12,44 @@ import { shownTogether } from "./shown-together.js";
  * Sets fits of rival rules side by side; the result shows the table of evidence and its verdict in words, forecasts from
  * earlier parts of the record beside naive ones, and with `decide` what each rule that stands leads to.
  *
+ * Fits may be given in a list or one after the other.
+ *
  * @example compare([crowdingFit, shelteredFit]).sentence;
  */
-export function compare(fits: readonly Fit[], options: CompareOptions = {}): Comparison {
-  const { decide, ...others } = frozenCopy(options);
+export function compare(fits: readonly Fit[], options?: CompareOptions): Comparison;
+export function compare(...fits: readonly Fit[]): Comparison;
+export function compare(
+  ...fitsAndOptions: readonly [...fits: readonly Fit[], options: CompareOptions]
+): Comparison;
+export function compare(...given: readonly unknown[]): Comparison {
+  const call = inList(given);
+  checkCall("compare", call);
+  const [fits, options = {}] = call as readonly [readonly Fit[], CompareOptions?];
+  return runShown("Comparison", frozenCopy(options), (settings) => compared(fits, settings));
+}
+
+/** The fits of a call in a list, where they were given one after the other. */
+function inList(given: readonly unknown[]): readonly unknown[] {
+  const end = given.findIndex((each) => (each as { kind?: unknown } | undefined)?.kind !== "fit");
+  if (end === 0) return given;
+  return end < 0 ? [given] : [given.slice(0, end), ...given.slice(end)];
+}
+
+function compared(fits: readonly Fit[], { decide, ...others }: CompareOptions): Comparison {
   // The fits handed to `decide` are those given here, with their estimates by name.
-  const compared = compareFits(fits, { ...others, ...(decide && { decide: (fit) => decide(fit as Fit) }) });
-  caseLog.noteStep(`compared: ${compared.sentence}`);
-  const { rules: supported } = compared.verdict;
-  const ruledOut = compared.rows.filter(({ rule }) => !supported.includes(rule));
+  const comparison = compareFits(fits, { ...others, ...(decide && { decide: (fit) => decide(fit as Fit) }) });
+  caseLog.noteStep(`compared: ${comparison.sentence}`);
+  const { rules: supported } = comparison.verdict;
+  const ruledOut = comparison.rows.filter(({ rule }) => !supported.includes(rule));
   caseLog.noteVerdict(
     fits,
     ruledOut.map(({ place, rule }) => ({ fit: fits[place]!, label: rule, supported })),
   );
-  return showing(compared, () =>
+  return showing(comparison, () =>
     shownTogether([
-      comparisonTable(compared, fits),
-      compared.decisions.length > 0 ? decisionsTable(compared) : undefined,
-      compared.rollingOrigin && forecastsTable(compared.rollingOrigin, fits),
+      comparisonTable(comparison, fits),
+      comparison.decisions.length > 0 ? decisionsTable(comparison) : undefined,
+      comparison.rollingOrigin && forecastsTable(comparison.rollingOrigin, fits),
     ]),
   );
 }

@@ -7,6 +7,7 @@ import {
   undo as undoLast,
 } from "../../src/record/index.js";
 import { columnsOf, noteFrame, notesOf, type RecordLike, toFrame } from "../dataframe/index.js";
+import { checkCall } from "../options/index.js";
 import { bundleOf, showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { decisionSentence, decisionsTable } from "./decisions-table.js";
@@ -22,6 +23,7 @@ import { decisionSentence, decisionsTable } from "./decisions-table.js";
  * checked.columns.at(-1) // "reading (corrected)"
  */
 export function correct(record: RecordLike, correction: Correction): DataFrame {
+  checkCall("correct", arguments);
   const corrected = correctTable(columnsOf(record), correction);
   caseLog.noteStep(`correction: ${decisionSentence(corrected.decisions!.at(-1)!)}`);
   return sameSource(record, toFrame(corrected));
@@ -34,6 +36,7 @@ export function correct(record: RecordLike, correction: Correction): DataFrame {
  * @example undo(correct(readings, { row: 4, why: "flask shaken" })).columns.length // readings.columns.length
  */
 export function undo(record: RecordLike, row?: number): DataFrame {
+  checkCall("undo", arguments);
   const before = columnsOf(record);
   const after = undoLast(before, row);
   const taken = before.decisions!.find((decision) => !after.decisions?.includes(decision));
@@ -53,6 +56,7 @@ export interface DecisionsLog {
  * @example decisionsLog(correct(readings, { row: 4, why: "flask shaken" })).decisions.length // 1
  */
 export function decisionsLog(record: RecordLike): DecisionsLog {
+  checkCall("decisionsLog", arguments);
   const isObserved = (record as Partial<Observations>).kind === "observations";
   const { decisions = [] } = isObserved ? (record as Observations) : columnsOf(record as RecordLike);
   const made: DecisionsLog = { kind: "decisions", decisions };

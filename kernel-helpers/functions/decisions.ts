@@ -12,9 +12,11 @@ import type { Fit } from "../../src/estimate/index.js";
 import { frozenCopy } from "../../src/numeric/index.js";
 import type { Forecast, Simulation } from "../../src/projection/index.js";
 import type { Rule } from "../../src/rule/index.js";
+import { checkCall } from "../options/index.js";
 import { type TimeToReach, withSingleReach } from "../results/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { seededRun } from "./seeded-run.js";
 import { levelWords, showNextReading, showReach, showSolved } from "./show-decisions.js";
 import { shownTogether } from "./shown-together.js";
 
@@ -25,6 +27,7 @@ import { shownTogether } from "./shown-together.js";
  * @example timeToReach(ahead, { state: "N", risesTo: 120 }).sentence;
  */
 export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOptions): TimeToReach {
+  checkCall("timeToReach", arguments);
   const found = withSingleReach(reachesValue(ahead, frozenCopy(options)));
   caseLog.noteStep(`asked when ${found.state} ${levelWords(found)}`);
   return showing(found, () => shownTogether(showReach(found, ahead)));
@@ -40,9 +43,16 @@ export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOp
  *   until: { level: "owed", at: 12, is: 0 } }).solutions[0].value // 1000*0.01/(1 - 1.01**-12)
  */
 export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
-  const found = solveForSetting(subject, { seed: caseLog.seed(), ...frozenCopy(options) });
-  caseLog.noteStep(`asked what ${found.vary} brings ${found.measure} to its target`);
+  checkCall("solveFor", arguments);
+  const found = seededRun("Solving", options, (own) => solveForSetting(subject, own));
+  caseLog.noteStep(`asked what ${found.vary} brings ${found.measure} ${aimWords(found)}`);
   return showing(found, () => shownTogether(showSolved(found)));
+}
+
+/** "to 0", "to at most 120": the target that was asked for. */
+function aimWords({ target }: Solved): string {
+  if (target.is !== undefined) return `to ${target.is}`;
+  return target.atMost === undefined ? `to at least ${target.atLeast}` : `to at most ${target.atMost}`;
 }
 
 /**
@@ -52,7 +62,8 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
  * @example nextReading(fitted, { periods: 10, answer: { parameter: "K" } }).sentence;
  */
 export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOptions): NextReading {
-  const found = nextReadingOf(fits, { seed: caseLog.seed(), ...frozenCopy(options) });
+  checkCall("nextReading", arguments);
+  const found = seededRun("Next reading", options, (own) => nextReadingOf(fits, own));
   caseLog.noteStep(`asked which further reading of ${found.state} would ${found.purpose}`);
   return showing(found, () => shownTogether(showNextReading(found)));
 }

@@ -1,5 +1,6 @@
 import { nearestNames } from "../../src/numeric/index.js";
 import { type Term, termOf, terms } from "../glossary/index.js";
+import { checkCall } from "../options/index.js";
 import { escapeHtml, showing } from "../tables/index.js";
 import { refuseNoTerm, refuseUnknownTerm } from "./refusals.js";
 
@@ -17,6 +18,7 @@ export interface Explanation {
  * @example explain("fill rate").term.field; // "stock"
  */
 export function explain(name: string): Readonly<Explanation> {
+  checkCall("explain", arguments);
   if (typeof name !== "string" || name.trim() === "") throw refuseNoTerm();
   const known = terms.flatMap((one) => [one.name, ...one.otherNames]);
   const term = termOf(name);

@@ -12,6 +12,7 @@ import {
 import { freezeDeep, frozenCopy } from "../../src/numeric/index.js";
 import type { Observations } from "../../src/record/index.js";
 import type { Rule } from "../../src/rule/index.js";
+import { checkCall } from "../options/index.js";
 import type { Fit } from "../results/index.js";
 import { caseLog } from "./case-log.js";
 import { ruleInFull } from "./rule-title.js";
@@ -27,6 +28,7 @@ import { presentFit } from "./show-fit.js";
  * @example fit(crowding, counts, { errors: "observation", distribution: "lognormal" });
  */
 export function fit(rule: Rule, observations: Observations, options: FitOptions): Fit {
+  checkCall("fit", arguments);
   const fitted = presentFit(fitRule(rule, observations, frozenCopy(options)));
   caseLog.noteStep(
     `fit ${ruleInFull(rule)} with errors: ${options.errors}, distribution: ${options.distribution ?? "normal"}`,
@@ -41,6 +43,7 @@ export function fit(rule: Rule, observations: Observations, options: FitOptions)
  * @example estimates(fitted)[0].name; // "R"
  */
 export function estimates(fit: EngineFit): readonly EstimateRow[] {
+  checkCall("estimates", arguments);
   return freezeDeep(estimatesOf(fit));
 }
 
@@ -50,6 +53,7 @@ export function estimates(fit: EngineFit): readonly EstimateRow[] {
  * @example points(fitted).length; // counts.groups[0].index.length
  */
 export function points(fit: EngineFit): readonly PointRow[] {
+  checkCall("points", arguments);
   return freezeDeep(pointsOf(fit));
 }
 
@@ -59,5 +63,6 @@ export function points(fit: EngineFit): readonly PointRow[] {
  * @example summary(fitted)[0].stop; // "converged"
  */
 export function summary(fit: EngineFit): readonly SummaryRow[] {
+  checkCall("summary", arguments);
   return freezeDeep(summaryOf(fit));
 }

@@ -14,6 +14,7 @@ import {
   windowed,
 } from "../../src/record/index.js";
 import { columnsOf, type RecordLike, toFrame } from "../dataframe/index.js";
+import { checkCall } from "../options/index.js";
 import { caseLog } from "./case-log.js";
 
 /**
@@ -23,6 +24,7 @@ import { caseLog } from "./case-log.js";
  * @example shift(readings, { column: "density", period: "hour", step: { every: 12, of: "hour" }, by: "flask" }).columns.at(-1) // "density, 1 before"
  */
 export function shift(record: RecordLike, options: ShiftOptions): DataFrame {
+  checkCall("shift", arguments);
   return toFrame(shifted(columnsOf(record), options));
 }
 
@@ -33,6 +35,7 @@ export function shift(record: RecordLike, options: ShiftOptions): DataFrame {
  * @example rolling({ week: [1, 2, 3], sold: [4, 6, 8] }, { column: "sold", over: 2, take: "mean", period: "week", step: "week" }).values[2][2] // 7
  */
 export function rolling(record: RecordLike, options: WindowOptions & { readonly over: number }): DataFrame {
+  checkCall("rolling", arguments);
   return toFrame(windowed(columnsOf(record), options));
 }
 
@@ -42,6 +45,7 @@ export function rolling(record: RecordLike, options: WindowOptions & { readonly 
  * @example expanding({ week: [1, 2, 3], sold: [4, 6, 8] }, { column: "sold", take: "sum", period: "week", step: "week" }).values[2][2] // 18
  */
 export function expanding(record: RecordLike, options: Omit<WindowOptions, "over">): DataFrame {
+  checkCall("expanding", arguments);
   return toFrame(windowed(columnsOf(record), options));
 }
 
@@ -54,6 +58,7 @@ export function expanding(record: RecordLike, options: Omit<WindowOptions, "over
  * toPeriods(days, { period: "date", step: "day", to: "month", take: { sold: "sum" } }).values[0][1] // 10
  */
 export function toPeriods(record: RecordLike, options: ToPeriodsOptions): DataFrame {
+  checkCall("toPeriods", arguments);
   return toFrame(periodTable(columnsOf(record), options));
 }
 
@@ -65,6 +70,7 @@ export function toPeriods(record: RecordLike, options: ToPeriodsOptions): DataFr
  * @example fill({ week: [1, 2, 4], sold: [4, 6, 10] }, { column: "sold", with: "between", period: "week", step: "week" }).values[2] // [3, 8, true]
  */
 export function fill(record: RecordLike, options: FillOptions): DataFrame {
+  checkCall("fill", arguments);
   caseLog.noteStep(
     `empty cells of "${options.column}" filled: ${typeof options.with === "number" ? `with ${options.with}` : options.with}`,
   );
@@ -77,6 +83,7 @@ export function fill(record: RecordLike, options: FillOptions): DataFrame {
  * @example wider({ week: [1, 1], item: ["rope", "tar"], sold: [4, 6] }, { keep: "week", names: "item", values: "sold" }).columns // ["week", "rope", "tar"]
  */
 export function wider(record: RecordLike, options: WiderOptions): DataFrame {
+  checkCall("wider", arguments);
   return toFrame(widerTable(columnsOf(record), options));
 }
 
@@ -86,5 +93,6 @@ export function wider(record: RecordLike, options: WiderOptions): DataFrame {
  * @example longer({ week: [1], rope: [4], tar: [6] }, { keep: "week", names: "item", values: "sold" }).values // [[1, "rope", 4], [1, "tar", 6]]
  */
 export function longer(record: RecordLike, options: LongerOptions): DataFrame {
+  checkCall("longer", arguments);
   return toFrame(longerTable(columnsOf(record), options));
 }

@@ -1,5 +1,4 @@
 import type { Fit } from "../../src/estimate/index.js";
-import { frozenCopy } from "../../src/numeric/index.js";
 import {
   type Forecast as EngineForecast,
   type ForecastOptions,
@@ -8,7 +7,7 @@ import {
   simulate as simulateRule,
 } from "../../src/projection/index.js";
 import { type Rule, ruleLabel } from "../../src/rule/index.js";
-import { withProgress } from "../progress/index.js";
+import { checkCall } from "../options/index.js";
 import {
   type Forecast,
   forecastWithValues,
@@ -17,6 +16,7 @@ import {
 } from "../results/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { seededRun } from "./seeded-run.js";
 import { presentFit } from "./show-fit.js";
 import { showForecast } from "./show-forecast.js";
 import { showSimulation } from "./show-simulation.js";
@@ -30,9 +30,8 @@ import { shownTogether } from "./shown-together.js";
  * @example forecast(fitted, { periods: 20 });
  */
 export function forecast(fit: Fit, options: ForecastOptions): Forecast {
-  const ahead = withProgress("Forecast", undefined, ({ at }) =>
-    forecastFit(fit, { seed: caseLog.seed(), onProgress: at, ...frozenCopy(options) }),
-  );
+  checkCall("forecast", arguments);
+  const ahead = seededRun("Forecast", options, (own) => forecastFit(fit, own));
   caseLog.noteStep(
     `forecast "${ruleLabel(fit.rule)}" over ${options.periods} periods, ${ahead.options.paths} paths`,
   );
@@ -55,9 +54,8 @@ export function presentForecast(ahead: EngineForecast): Forecast {
  * simulate(rule, { parameters: { R: 1.1 }, initial: { N: 100 }, periods: 2 }).groups[0].states[0].central.length // 3
  */
 export function simulate(rule: Rule, options: SimulateOptions): Simulation {
-  const run = withProgress("Simulation", undefined, ({ at }) =>
-    simulateRule(rule, { seed: caseLog.seed(), onProgress: at, ...frozenCopy(options) }),
-  );
+  checkCall("simulate", arguments);
+  const run = seededRun("Simulation", options, (own) => simulateRule(rule, own));
   caseLog.noteStep(
     `simulated "${ruleLabel(rule)}" over ${options.periods} periods, ${run.options.paths} paths`,
   );

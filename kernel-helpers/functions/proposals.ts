@@ -3,14 +3,15 @@ import {
   type ProposeOptions,
   propose as tryCatalogue,
 } from "../../src/evidence/index.js";
-import { frozenCopy } from "../../src/numeric/index.js";
 import type { Observations } from "../../src/record/index.js";
 import { type RuleCatalogue, shortNames } from "../../src/rule/index.js";
 import { type Figure, figure } from "../figures/index.js";
+import { checkCall } from "../options/index.js";
 import type { Proposal } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { acrossGroup } from "./across-periods.js";
 import { caseLog } from "./case-log.js";
+import { seededRun } from "./seeded-run.js";
 import { presentFit } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
 
@@ -23,7 +24,8 @@ import { shownTogether } from "./shown-together.js";
  * @example propose(counts).verdict.kind;
  */
 export function propose(observations: Observations, options: ProposeOptions = {}): Proposal {
-  const proposal = tryCatalogue(observations, { seed: caseLog.seed(), ...frozenCopy(options) });
+  checkCall("propose", arguments);
+  const proposal = seededRun("Rules of the catalogue", options, (own) => tryCatalogue(observations, own));
   caseLog.noteStep(`tried the catalogue: ${proposal.sentence}`);
   return showing(Object.assign(proposal, { fits: proposal.fits.map(presentFit) }), () =>
     shownTogether([

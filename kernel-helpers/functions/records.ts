@@ -31,6 +31,7 @@ import {
   tablesOf,
   toFrame,
 } from "../dataframe/index.js";
+import { checkCall } from "../options/index.js";
 import type { Observations } from "../results/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
@@ -51,6 +52,7 @@ import { presentObservations } from "./show-observations.js";
  * @example const readings = await readRecord("data/algae-line-3.csv");
  */
 export async function readRecord(path: string, options: ReadOptions = {}): Promise<DataFrame> {
+  checkCall("readRecord", arguments);
   const table = await readTable(path, options);
   const frame = toFrame(table);
   const found = [...table.source.found, ...marksFound(table.names)];
@@ -80,6 +82,7 @@ export async function writeRecord(
   path: string,
   options: WriteOptions = {},
 ): Promise<void> {
+  checkCall("writeRecord", arguments);
   const tables = tablesOf(record);
   const named = tables.length === 1 ? withDecisions(tables[0]!.table, path, options) : tables;
   await writeTables(named, path, options);
@@ -107,6 +110,7 @@ function withDecisions(
  * const counts = observations(readings, { period: "hour", step: { every: 12, of: "hour" }, by: "flask", value: "density" });
  */
 export function observations(record: RecordLike, options: ObservationOptions): Observations {
+  checkCall("observations", arguments);
   const table = columnsOf(record);
   const made = presentObservations(observe(table, frozenCopy(options)));
   const { source } = notesOf(record);
@@ -121,6 +125,7 @@ export function observations(record: RecordLike, options: ObservationOptions): O
  * @example differences(counts, { per: "log" });
  */
 export function differences(record: EngineObservations, options: DifferenceOptions = {}): Differences {
+  checkCall("differences", arguments);
   const made = differencesOf(record, frozenCopy(options));
   return showing(made, () => differencesBundle(made));
 }

@@ -9,13 +9,13 @@ import {
   gridInterval as gridIntervalOf,
   type Interval,
 } from "../../src/estimate/index.js";
-import { frozenCopy } from "../../src/numeric/index.js";
 import type { Observations } from "../../src/record/index.js";
 import { ruleLabel } from "../../src/rule/index.js";
-import { withProgress } from "../progress/index.js";
+import { checkCall } from "../options/index.js";
 import type { UpdatedFit } from "../results/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
+import { seededRun } from "./seeded-run.js";
 import { presentFitIn } from "./show-fit.js";
 import { shownTogether } from "./shown-together.js";
 
@@ -27,9 +27,8 @@ import { shownTogether } from "./shown-together.js";
  * @example bootstrap(fit(crowding, counts, { errors: "observation" }), { resamples: 99 }).used; // 99
  */
 export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
-  const drawn = withProgress("Refits", undefined, ({ at }) =>
-    bootstrapFit(fit, { seed: caseLog.seed(), onProgress: at, ...frozenCopy(options) }),
-  );
+  checkCall("bootstrap", arguments);
+  const drawn = seededRun("Refits", options, (own) => bootstrapFit(fit, own));
   caseLog.noteStep(`bootstrap of "${ruleLabel(fit.rule)}" by ${drawn.errors} errors, ${drawn.used} refits`);
   return showing(drawn, () => shownTogether([bootstrapTable(fit, drawn)]));
 }
@@ -71,7 +70,8 @@ function bootstrapTable(fit: Fit, drawn: Bootstrap): Table {
  * @example gridInterval(fit(crowding, counts, { errors: "process" }), "K", { resamples: 49 }).kind; // "grid"
  */
 export function gridInterval(fit: Fit, name: string, options: GridIntervalOptions = {}): Interval {
-  const interval = gridIntervalOf(fit, name, { seed: caseLog.seed(), ...frozenCopy(options) });
+  checkCall("gridInterval", arguments);
+  const interval = seededRun("Simulated records", options, (own) => gridIntervalOf(fit, name, own));
   caseLog.noteStep(`interval of ${name} in "${ruleLabel(fit.rule)}" by simulation at every value`);
   return showing(interval, () => shownTogether([intervalTable(name, interval)]));
 }
@@ -97,6 +97,7 @@ function intervalTable(name: string, { level, lower, upper, note }: Interval): T
  * updateFit(fit(crowding, early, { errors: "observation" }), later).added[""]; // 2
  */
 export function updateFit(before: Fit, later: Observations): UpdatedFit {
+  checkCall("updateFit", arguments);
   const extended = extendFit(before, later);
   const added = Object.values(extended.added).reduce((sum, count) => sum + count, 0);
   caseLog.noteStep(`"${ruleLabel(before.rule)}" fitted again with ${added} later rows`);

@@ -5,6 +5,7 @@ import {
   type RuleCatalogue,
   recurrence as readRule,
 } from "../../src/rule/index.js";
+import { checkCall } from "../options/index.js";
 import { showing } from "../tables/index.js";
 import { catalogueTable } from "./catalogue-table.js";
 import { presentRule } from "./show-rule.js";
@@ -20,14 +21,17 @@ export type { RecurrenceOptions, Rule, RuleCatalogue } from "../../src/rule/inde
  * @example recurrence("ΔN = r*N*(1 - N/K)").parameters; // ["r", "K"]
  */
 export function recurrence(text: string, options: RecurrenceOptions = {}): Rule {
+  checkCall("recurrence", arguments);
   return presentRule(readRule(text, options));
 }
 
-/** Wraps one maker of the catalogue so that its rule shows itself. */
-const showingItself =
-  <Options extends readonly unknown[]>(make: (...options: Options) => Rule) =>
-  (...options: Options): Rule =>
-    presentRule(make(...options));
+/** Wraps one maker of the catalogue: its options are checked, and its rule shows itself. */
+const presented =
+  <Options extends readonly unknown[]>(name: string, make: (...options: Options) => Rule) =>
+  (...options: Options): Rule => {
+    checkCall(`rules.${name}`, options);
+    return presentRule(make(...options));
+  };
 
 /**
  * The catalogue: rules that have a name. Each is called for its rule, which shows its range, rest levels, slopes,
@@ -40,7 +44,7 @@ export const rules: RuleCatalogue = showing(
   Object.fromEntries(
     Object.entries(namedRules).map(([name, make]) => [
       name,
-      showingItself(make as (options?: never) => Rule),
+      presented(name, make as (options?: never) => Rule),
     ]),
   ) as unknown as RuleCatalogue,
   () => shownTogether([catalogueTable()]),

@@ -1,6 +1,7 @@
 import type { Fit } from "../../src/estimate/index.js";
 import { sameParameters as askParameters, type SameParameters } from "../../src/evidence/index.js";
 import { ruleLabel } from "../../src/rule/index.js";
+import { checkCall } from "../options/index.js";
 import { showing, type Table, table } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
 import { presentFit } from "./show-fit.js";
@@ -13,6 +14,7 @@ import { shownTogether } from "./shown-together.js";
  * @example sameParameters(flasksFit).sentence.slice(0, 11); // "No evidence"
  */
 export function sameParameters(fit: Fit): SameParameters {
+  checkCall("sameParameters", arguments);
   const asked = askParameters(fit);
   presentFit(asked.combined);
   presentFit(asked.separate);

@@ -1,6 +1,7 @@
 import type { Fit as EngineFit } from "../../src/estimate/index.js";
 import { loadResult as loadSaved, saveResult as saveEngine } from "../../src/numeric/index.js";
 import type { Forecast as EngineForecast } from "../../src/projection/index.js";
+import { checkCall } from "../options/index.js";
 import type { Fit, Forecast } from "../results/index.js";
 import { presentForecast } from "./projections.js";
 import { presentFit } from "./show-fit.js";
@@ -12,6 +13,7 @@ import { presentFit } from "./show-fit.js";
  * @example saveResult(fitted).slice(0, 28); // '{"format":"periodwise result'
  */
 export function saveResult(result: EngineFit | EngineForecast): string {
+  checkCall("saveResult", arguments);
   return saveEngine(result);
 }
 
@@ -23,6 +25,7 @@ export function saveResult(result: EngineFit | EngineForecast): string {
  * @example loadResult(saveResult(fitted)).kind; // "fit"
  */
 export function loadResult(text: string): Fit | Forecast {
+  checkCall("loadResult", arguments);
   const loaded = loadSaved<EngineFit | EngineForecast>(text);
   return loaded.kind === "fit" ? presentFit(loaded) : presentForecast(loaded);
 }

@@ -1,4 +1,5 @@
 import { inspect } from "node:util";
+import { checkCall } from "../options/index.js";
 import { type Bundle, bundleOf } from "../tables/index.js";
 
 /** Anything with a kind that shows itself. */
@@ -16,6 +17,7 @@ type Display = (bundle: Bundle | Promise<Bundle>) => void;
  * @example show(differences(counts));
  */
 export function show(value: unknown): void {
+  checkCall("show", arguments);
   const display = (globalThis as { [key: symbol]: unknown })[Symbol.for("periodwise.display")];
   const bundle = bundleOf(value).then((own) => own ?? { "text/plain": inspect(value) });
   if (typeof display === "function") (display as Display)(bundle);

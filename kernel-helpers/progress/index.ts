@@ -1,2 +1,3 @@
 export { type Progress, progress } from "./progress.js";
+export { runShown } from "./run-shown.js";
 export { withProgress } from "./with-progress.js";

@@ -1,3 +1,4 @@
+import { checkCall } from "../options/index.js";
 import { progressLine, progressRecord, type Standing } from "./progress-line.js";
 import { type ProgressPlace, presentPlace } from "./progress-place.js";
 import { refuseInterrupted } from "./refusals.js";
@@ -30,6 +31,7 @@ const memorable = 5;
  * @example progress("Refits", 200).kind; // "progress"
  */
 export function progress(label: string, total?: number): Progress {
+  checkCall("progress", arguments);
   return progressAt(presentPlace(), label, total);
 }
 

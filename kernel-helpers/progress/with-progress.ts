@@ -1,3 +1,4 @@
+import { checkCall } from "../options/index.js";
 import { type Progress, progress } from "./progress.js";
 
 /**
@@ -7,6 +8,7 @@ import { type Progress, progress } from "./progress.js";
  * @example withProgress("Sum", 3, ({ advance }) => { let sum = 0; for (const x of [1, 2, 3]) { sum += x; advance(); } return sum; }); // 6
  */
 export function withProgress<T>(label: string, total: number | undefined, work: (shown: Progress) => T): T {
+  checkCall("withProgress", arguments);
   const shown = progress(label, total);
   let pending = false;
   try {

@@ -1,5 +1,6 @@
+export { groupRequiredError } from "./errors.js";
 export { type EstimatedValues, type Fit, type GroupFit, withEstimates } from "./fit-shortcuts.js";
-export { groupName } from "./group-named.js";
+export { groupName, groupNamed } from "./group-named.js";
 export type { ChangePoint, Check, CompareOptions, Proposal, UpdatedFit } from "./holding-fits.js";
 export {
   type Forecast,

@@ -1,3 +1,4 @@
+import { checkCall } from "../options/index.js";
 import { minorUnits } from "../wording/index.js";
 import { headings } from "./laid-out.js";
 import { oneLine } from "./plain-text.js";
@@ -10,6 +11,7 @@ import type { Column, Table } from "./table.js";
  * @example tabSeparated(table({ title: "", columns: [{ key: "n", label: "Week", kind: "integer" }], rows: [{ n: 1 }] }));
  */
 export function tabSeparated(table: Table): string {
+  checkCall("tabSeparated", arguments);
   const head = headings(table).map(oneLine);
   const lines = [...table.rows, ...table.totals].map((row) =>
     table.columns.map((column) => plain(row[column.key], column, table)),

@@ -1,4 +1,5 @@
 import { frozenCopy } from "../../src/numeric/index.js";
+import { checkCall } from "../options/index.js";
 import { type NumberFormat, numberFormat } from "../wording/index.js";
 import { columnRepeated, noColumns, unknownColumnKind } from "./refusals.js";
 import { showing } from "./show-itself.js";
@@ -21,12 +22,17 @@ export type ColumnKind = (typeof kinds)[number];
 export interface Column {
   /** Where rows hold the value. */
   readonly key: string;
+  /** Heading of the column. */
   readonly label: string;
-  /** Written behind the label in brackets; "" or absent = none. */
+  /** Unit, written behind the label in brackets; default "" (none). */
   readonly unit?: string;
+  /** How a value is written. */
   readonly kind: ColumnKind;
+  /**
+   * Significant digits of a number, or decimals of a percentage or probability; default as the kind has it.
+   */
   readonly digits?: number;
-  /** False: digits are not set apart in thousands, as in a year; default true. */
+  /** Whether digits are set apart in thousands; false for a year; default true. */
   readonly grouped?: boolean;
   /** Key of the standard error (estimate) or Monte-Carlo error (probability) that says how many digits count. */
   readonly pairedWith?: string;
@@ -34,9 +40,11 @@ export interface Column {
 
 /** What stands below a table: a sentence, with a mark at a heading or a cell when `column` (and `row`) name one. */
 export interface Footnote {
+  /** What the note says. */
   readonly text: string;
+  /** Column that the note is about. */
   readonly column?: string;
-  /** 0-based; without it the mark stands at the column's heading. */
+  /** Row that it is about, 0 for the first; default the column's heading. */
   readonly row?: number;
 }
 
@@ -56,14 +64,19 @@ export interface Table {
 
 /** What `table` takes. */
 export interface TableOptions {
+  /** Title of the table. */
   readonly title: string;
+  /** Columns from left to right. */
   readonly columns: readonly Column[];
+  /** Rows: objects that hold a value under the key of each column. */
   readonly rows: readonly object[];
+  /** Rows set apart at the foot: sums, means. */
   readonly totals?: readonly object[];
+  /** What stands below the table. */
   readonly notes?: readonly (string | Footnote)[];
-  /** Default 40. */
+  /** At most so many rows are shown; the count of the others is said; default 40. */
   readonly limit?: number;
-  /** Default: the format in force (`numberFormat`). */
+  /** How numbers are written; default the format in force (`numberFormat`). */
   readonly format?: Partial<NumberFormat>;
 }
 
@@ -76,6 +89,7 @@ export interface TableOptions {
  * @example table({ title: "Levels", columns: [{ key: "n", label: "Week", kind: "integer" }], rows: [{ n: 1 }] });
  */
 export function table(options: TableOptions): Table {
+  checkCall("table", arguments);
   checkColumns(options.columns, options.title);
   // Copies: the caller's rows must not be frozen, nor change the table later.
   const { title, columns, rows, totals = [], notes = [], limit = 40, format } = frozenCopy(options);

@@ -28,6 +28,16 @@ export function refuseUnknownName(name: string, known: readonly string[], role: 
   );
 }
 
+/** @param name - undefined where one of several was to be named. */
+export function groupError(name: string | undefined, groups: readonly string[]): ModelError {
+  const names = groups.map((group) => `"${group}"`).join(", ");
+  const has =
+    groups.length === 1 && groups[0] === "" ? "a single group without a name: leave `group` out" : names;
+  const said =
+    name === undefined ? "name one of the groups of the fit with it" : `the fit has no group "${name}"`;
+  return new ModelError("which-group", `Option \`group\`: ${said}. It has ${has}.`, { group: name, groups });
+}
+
 export function refuseStartOutsideBounds(
   name: string,
   value: number,

@@ -1,16 +1,18 @@
-import { type RandomStream, randomStream } from "../numeric/index.js";
+import { type RandomStream, type RunHooks, randomStream, type Tick, ticker } from "../numeric/index.js";
 import type { Observations, ObservedGroup } from "../record/index.js";
 import { refuseNoDensity } from "./refusals.js";
 
 /** Options of `densityDependence`. */
-export interface DensityOptions {
-  /** Default: the only state. */
+export interface DensityOptions extends RunHooks {
+  /** Name of the state; default the only one. */
   readonly state?: string;
   /** Records drawn without density dependence; default 1999. */
   readonly resamples?: number;
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
-  /** Confidence above which density dependence is called; default 0.95, a test at 5%. */
+  /**
+   * Confidence above which density dependence is called, between 0 and 1; 0.95 is a test at 5%; default 0.95.
+   */
   readonly level?: number;
 }
 
@@ -57,11 +59,12 @@ export function densityDependence(
 ): DensityDependence {
   const { resamples = 1999, seed = 1, level = 0.95 } = options;
   const state = options.state ?? observations.states[0]!.name;
+  const tick = ticker(options, observations.groups.length * resamples);
   let stream = randomStream(seed);
   const groups = observations.groups.map((group) => {
     const own = stream;
     stream = stream.jump();
-    return groupDensity(group, state, resamples, level, own);
+    return groupDensity(group, state, { resamples, level, tick }, own);
   });
   const sentence = groups.map((group) => group.sentence).join(" ");
   return {
@@ -76,8 +79,7 @@ export function densityDependence(
 function groupDensity(
   group: ObservedGroup,
   state: string,
-  resamples: number,
-  level: number,
+  { resamples, level, tick }: { readonly resamples: number; readonly level: number; readonly tick: Tick },
   stream: RandomStream,
 ): GroupDensity {
   const values = group.values[state];
@@ -88,6 +90,7 @@ function groupDensity(
   let below = 1;
   const drawn = new Float64Array(logs.length);
   for (let k = 0; k < resamples; k++) {
+    tick();
     walk(logs[0]!, line.growth, line.deviation, group.index, stream, drawn);
     if ((lineOf(drawn, group.index)?.statistic ?? 0) <= line.statistic) below++;
   }

@@ -15,6 +15,15 @@ export function emptySample(): ModelError {
   );
 }
 
+export function interrupted(done: number, of: number, reason: unknown): ModelError {
+  return new ModelError(
+    "interrupted",
+    `The signal ended the run after ${done} of ${of}; its result is not kept. Run it again without aborting for one.`,
+    { done, of },
+    reason,
+  );
+}
+
 export function badSeed(seed: unknown): ModelError {
   return new ModelError(
     "bad-seed",

@@ -10,7 +10,9 @@ export type Measured = "level" | "flow";
 
 /** Limits of what could be read: a number beyond which values are censored, or the name of a flag column. */
 export interface CensoringLimits {
+  /** Limit below which values are censored, or the name of a flag column. */
   readonly below?: number | string;
+  /** Limit above which values are censored, or the name of a flag column. */
   readonly above?: number | string;
 }
 
@@ -20,9 +22,9 @@ export interface ObservationOptions {
   readonly period: string | readonly [string, string];
   /** Length of one step, or a calendar; required, because none is assumed. */
   readonly step?: StepLength | CalendarName;
-  /** The one value column. Give this or `values`. */
+  /** The one value column; give this or `values`. */
   readonly value?: string;
-  /** State name of the rules -> column. */
+  /** Columns of values, by the state of the rules. */
   readonly values?: Readonly<Record<string, string>>;
   /** Unit of the values, or one a state; default "" (none). */
   readonly unit?: string | Readonly<Record<string, string>>;
@@ -42,22 +44,25 @@ export interface ObservationOptions {
   /** `"signs"` reads cells such as "<0.05"; or limits as numbers or flag columns. */
   readonly censored?: "signs" | CensoringLimits;
   /**
-   * A level at an instant, or a flow over the period that ends at the row; default "level". Or one a column, inputs
-   * included: `{ owed: "level", paid: "flow" }`.
+   * A level at an instant, or a flow over the period that ends at the row; or one a column, inputs included:
+   * `{ owed: "level", paid: "flow" }`; default "level".
    */
   readonly measured?: Measured | Readonly<Record<string, Measured>>;
   /** Order of events inside a period, in words; printed with every rule. */
   readonly order?: string;
-  /** Columns that drive the rule: names, or input name -> column. */
+  /** Columns that drive the rule: names, or columns by the name of the input. */
   readonly inputs?: readonly string[] | Readonly<Record<string, string>>;
   /**
-   * Two rows of one period: "refuse" (default), or what a level takes of them; columns measured as flows are added
-   * up. Or one choice a column: `{ owed: "last", paid: "first" }`.
+   * Two rows of one period: what a level takes of them; columns measured as flows are added up. Or one choice
+   * a column: `{ owed: "last", paid: "first" }`; default "refuse".
    */
   readonly duplicates?: DuplicateChoice | Readonly<Record<string, DuplicateChoice>>;
-  /** Rows out of order: "refuse" (default), or "sort" by period. */
+  /** Rows out of order: refused, or sorted by period; default "refuse". */
   readonly disorder?: "refuse" | "sort";
-  /** Rows between steps: "refuse" (default) when more than a tenth of a step off, or "nearest". */
+  /**
+   * Rows between steps: refused when more than a tenth of a step off, or put on the nearest; default
+   * "refuse".
+   */
   readonly offStep?: "refuse" | "nearest";
   /** Sums that must foot, such as "closing = opening + interest - paid" or "opening = closing[t-1]". */
   readonly identities?: readonly string[];

@@ -5,9 +5,11 @@ import type { PeriodAxis } from "./period/period-axis.js";
 
 /** How far apart recorded periods lie: `{ every: 12, of: "hour" }` is one step of twelve hours. */
 export interface StepLength {
+  /** How many units one step takes. */
   readonly every: number;
+  /** Unit of time, such as hour, day or month. */
   readonly of: string;
-  /** Month and day on which a fiscal year begins, "04-01"; only with years. */
+  /** Month and day on which a fiscal year begins, such as "04-01"; only with years. */
   readonly begins?: string;
 }
 

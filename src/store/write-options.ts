@@ -3,11 +3,11 @@ import type { Format } from "./read-options.js";
 
 /** How to write a file. */
 export interface WriteOptions {
-  /** Default: by the file extension. */
+  /** What the file holds; default what its extension says. */
   readonly format?: Format;
-  /** Delimiter of a text file. Default "," ("\t" for .tsv). */
+  /** What separates the cells of a text file; default "," (a tab for .tsv). */
   readonly delimiter?: string;
-  /** Name of the sheet, or of the table in a database file. Default "record". */
+  /** Name of the sheet, or of the table in a database file; default "record". */
   readonly table?: string;
 }
 

@@ -25,11 +25,23 @@ describe("bootstrap", () => {
     },
   );
 
-  test("repeats its digits for a seed, and stops when asked to", () => {
+  test("repeats its digits for a seed, and ends when its signal is aborted", () => {
     const once = bootstrap(fitted, { resamples: 200, seed: 9 });
     expect(bootstrap(fitted, { resamples: 200, seed: 9 }).rows).toEqual(once.rows);
-    const stopped = bootstrap(fitted, { resamples: 900, onProgress: (done) => done < 300 });
-    expect(stopped.used).toBe(300);
+    const controller = new AbortController();
+    const reported: number[] = [];
+    const run = (): unknown =>
+      bootstrap(fitted, {
+        resamples: 900,
+        signal: controller.signal,
+        onProgress: (done, of) => {
+          reported.push(done);
+          if (done === 300) controller.abort();
+          return of < 0;
+        },
+      });
+    expect(run).toThrow(expect.objectContaining({ code: "interrupted" }));
+    expect(reported).toHaveLength(300);
   });
 
   test("refuses what it cannot resample, and too few draws", () => {

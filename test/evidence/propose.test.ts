@@ -1,4 +1,5 @@
 import { describe, expect, test } from "vitest";
+import { fit } from "../../src/estimate/index.js";
 import { propose } from "../../src/evidence/index.js";
 import { randomStream } from "../../src/numeric/index.js";
 import { observations, tableOf } from "../../src/record/index.js";
@@ -15,14 +16,31 @@ const truths: readonly (readonly [string, Rule, readonly number[], number])[] = 
   ["gompertz", rules.gompertz(), [0.2 * Math.log(100), 0.8], 8],
 ];
 
+/** The records drawn here have errors in proportion to the level. */
+const proportional = { distribution: "lognormal" } as const;
+
 describe("propose", () => {
+  test("assumes what `fit` assumes where no distribution is given, and says so", () => {
+    const culture = cultureOf(21);
+    const proposal = propose(culture, { errors: "observation" });
+    const own = fit(rules.logistic(), culture, { errors: "observation" });
+    for (const each of proposal.fits) expect(each.options.distribution).toBe(own.options.distribution);
+    expect(proposal.notes.join(" ")).toContain("errors are normal with the same standard deviation");
+    const given = propose(culture, { ...proportional, errors: "observation" });
+    expect(given.fits.every(({ options }) => options.distribution === "lognormal")).toBe(true);
+    expect(given.notes.join(" ")).not.toContain("No distribution was given");
+  });
+
   // 8 records a rule, which the seed fixes; 1,000 of each in the benchmark.
   test("calls the rule that made a record supported in nine of ten", () => {
     const stream = randomStream(6);
     const found = truths.flatMap(([name, rule, parameters, first]) =>
       Array.from({ length: 8 }, (_, k) => {
         const errors = k % 2 === 0 ? "process" : "observation";
-        const { verdict } = propose(series(drawn(rule, parameters, first, 30, 0.1, errors, stream)));
+        const { verdict } = propose(
+          series(drawn(rule, parameters, first, 30, 0.1, errors, stream)),
+          proportional,
+        );
         return verdict.rules.includes(name);
       }),
     );
@@ -34,7 +52,7 @@ describe("propose", () => {
     let none = 0;
     for (let k = 0; k < 12; k++) {
       const noise = Float64Array.from({ length: 30 }, () => 100 * Math.exp(0.1 * stream.normal()));
-      const proposal = propose(series(noise));
+      const proposal = propose(series(noise), proportional);
       if (proposal.verdict.kind === "none-adequate") none++;
     }
     expect(none).toBeGreaterThanOrEqual(11);
@@ -42,7 +60,7 @@ describe("propose", () => {
 
   test("tells what a supported rule leaves open, and hands on its fit with intervals", () => {
     const values = drawn(rules.bevertonHolt(), [1.5, 100], 2, 14, 0.05, "observation", randomStream(7));
-    const proposal = propose(series(values), { errors: "observation" });
+    const proposal = propose(series(values), { ...proportional, errors: "observation" });
     expect(proposal.verdict.rules).toContain("bevertonHolt");
     const row = proposal.rows.find((each) => each.name === "thetaLogistic")!;
     expect(row).toMatchObject({ supported: true, undetermined: ["theta"] });
@@ -80,11 +98,11 @@ describe("propose", () => {
     }
     const stock = (...inputs: string[]): ReturnType<typeof observations> =>
       observations(tableOf(rows), { period: "t", step: { every: 1, of: "year" }, value: "index", inputs });
-    const proposal = propose(stock("landed"), { errors: "observation" });
+    const proposal = propose(stock("landed"), { ...proportional, errors: "observation" });
     expect(proposal.verdict.rules).toContain("schaefer");
     expect(proposal.notes.join(" ")).toContain('The only recorded input, "landed", was taken as the catch C');
     expect(proposal.sentence).not.toContain("Left out");
-    const both = propose(stock("landed", "heat"), { errors: "observation" });
+    const both = propose(stock("landed", "heat"), { ...proportional, errors: "observation" });
     expect(both.sentence).toContain('Left out of this answer: the recorded inputs "landed", "heat".');
   });
 

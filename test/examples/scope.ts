@@ -55,6 +55,7 @@ async function make(): Promise<Readonly<Record<string, unknown>>> {
   return {
     readings,
     counts,
+    flasks,
     crowding,
     sheltered,
     rule: sheltered,

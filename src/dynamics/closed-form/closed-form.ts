@@ -12,8 +12,12 @@ import type { ClosedRoot } from "./polynomial-roots.js";
 import { termsText } from "./term-text.js";
 
 export interface ClosedFormOptions extends HeldSetting {
+  /**
+   * First values by state, with lags a list, oldest first; those that the rule states or the fit estimates
+   * may be left out.
+   */
   readonly initial?: InitialValues;
-  /** Significant digits for `guaranteed`. Default 10. */
+  /** Significant digits that `guaranteed` asks for; default 10. */
   readonly digits?: number;
 }
 

@@ -9,16 +9,16 @@ import { followCycle, settleInCycle } from "./follow-cycle.js";
 import { followEquilibrium } from "./follow-equilibrium.js";
 
 export interface BifurcationsOptions extends HeldSetting {
-  /** The parameter that is varied. */
+  /** Parameter that is varied. */
   readonly vary: string;
-  /** Followed from the first value to the second, up or down. */
+  /** Values that are followed, from the first to the second, up or down. */
   readonly range: readonly [number, number];
   /**
-   * First value from which the cycle to be followed is reached; for a system a value by state, near the rest level
-   * to be followed.
+   * First value from which the cycle to be followed is reached; for a system a value by state, near the
+   * equilibrium to be followed.
    */
   readonly initial: number | Readonly<Record<string, number>>;
-  /** At most so many places; default 8. */
+  /** At most so many bifurcations; default 8. */
   readonly limit?: number;
 }
 

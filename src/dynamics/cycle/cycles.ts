@@ -31,9 +31,12 @@ export interface Cycles {
 }
 
 export interface CyclesOptions extends HeldSetting {
-  /** Periods until the values come round; a whole number from 1. */
+  /** Periods until the values come round. */
   readonly period: number;
-  /** Default: the rule's bounds, else a million times the largest parameter either way. */
+  /**
+   * Lowest and highest value to look at, for a system by state; default the rule's bounds, else a million
+   * times the largest parameter either way.
+   */
   readonly range?: SearchRange;
 }
 
@@ -69,7 +72,7 @@ export function cycles(rule: Rule, options: CyclesOptions): Cycles {
     throw unreadableOption("period", "a whole number from 1 to 64", period);
   }
   const held = holdStep(rule, options, "cycle");
-  const within = searchRanges(rule, held.parameters, options.range)[0]!;
+  const within = searchRanges(held, options.range)[0]!;
   const found = cyclesOfOneState(held, period, within);
   return {
     kind: "cycles",

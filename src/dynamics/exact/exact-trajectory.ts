@@ -14,10 +14,13 @@ import { rationalAlgebra } from "./rational-algebra.js";
 export type ExactValue = number | string | bigint;
 
 export interface ExactTrajectoryOptions {
+  /** Parameters by name: numbers, read as the decimals they print as, or texts such as "1/3". */
   readonly parameters?: Readonly<Record<string, ExactValue>>;
-  /** By state: its first value, or its first values oldest first where the rule reads past ones. */
+  /** First values by state, or lists of them, oldest first, where the rule reads past values. */
   readonly initial: Readonly<Record<string, ExactValue | readonly ExactValue[]>>;
+  /** By input: its values by period, period 0 first. */
   readonly inputs?: Readonly<Record<string, readonly ExactValue[]>>;
+  /** Whole periods to run. */
   readonly periods: number;
 }
 

@@ -12,13 +12,21 @@ export type LevelPlan =
   | number
   | ArrayLike<number>
   | {
+      /** Level in every period that nothing else is said of. */
       readonly usual: number;
+      /** Levels that hold from a period on, by its label or number. */
       readonly from?: Readonly<Record<string, number>>;
+      /** Levels of single periods, by their labels or numbers. */
       readonly at?: Readonly<Record<string, number>>;
     };
 
 /** One plan for all, or one a group: `{ byGroup: { A: 100, B: { usual: 300, at: { "2027-12": 0 } } } }`. */
-export type InputPlan = LevelPlan | { readonly byGroup: Readonly<Record<string, LevelPlan>> };
+export type InputPlan =
+  | LevelPlan
+  | {
+      /** One plan a group, by its name. */
+      readonly byGroup: Readonly<Record<string, LevelPlan>>;
+    };
 
 /** Plans by input. */
 export type InputPlans = Readonly<Record<string, InputPlan>>;

@@ -18,15 +18,15 @@ import { nothingRecorded, plannedInputs } from "./planned-inputs.js";
 /** Where the run of a rule begins, and what its periods are called. */
 export interface StartOptions {
   /**
-   * The first period: a number (default 0), a label such as "2026-03-31" where `period` names a unit of time, or a
-   * period of the record; default the last recorded one.
+   * The first period: a number, a label such as "2026-03-31" where `period` names a unit of time, or a period
+   * of the record; default the last recorded one, else 0.
    */
   readonly startsAt?: number | string;
   /** What a period is: "month", or a step such as `{ every: 12, of: "hour" }`; default "period". */
   readonly period?: string | StepLength;
   /** A record (or a fit) to go on from: its dates, its inputs so far, and its last values where `initial` has none. */
   readonly record?: Observations | { readonly observations: Observations };
-  /** Of a record with several groups: which one. */
+  /** Of a fit or a record with several groups: which one. */
   readonly group?: string;
 }
 

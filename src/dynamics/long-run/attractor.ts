@@ -1,23 +1,36 @@
+import { type RunHooks, ticker } from "../../numeric/index.js";
 import { compileRule, dependsOnPeriod, type Rule } from "../../rule/index.js";
 import { changesWithTime, strangeName, unreadableOption } from "../refusals.js";
 import { type HeldSetting, holdStep } from "../setting/held-step.js";
 import { initialVector } from "../setting/setting.js";
 
-export interface AttractorOptions extends Omit<HeldSetting, "inputs"> {
-  /** The parameter that is varied. */
+export interface AttractorOptions extends Omit<HeldSetting, "inputs">, RunHooks {
+  /** Parameter that is varied. */
   readonly vary: string;
   /** Values of the parameter: a list, or two ends with how many. */
   readonly values:
     | readonly number[]
-    | { readonly from: number; readonly to: number; readonly count?: number };
+    | {
+        /** First value. */
+        readonly from: number;
+        /** Last value. */
+        readonly to: number;
+        /** How many values, ends included; default 600. */
+        readonly count?: number;
+      };
   /** Periods kept at each value; default 300. */
   readonly periods?: number;
   /** Periods left out before; default 500. */
   readonly discard?: number;
   /** First values of the one state to start from: several show attractors that exist side by side. */
   readonly initial: number | readonly number[];
-  /** What a fit says of the parameter, to be marked. */
-  readonly estimate?: { readonly value: number; readonly interval: readonly [number, number] };
+  /** What a fit says of the parameter, to be marked; default the estimate of the fit given. */
+  readonly estimate?: {
+    /** Estimate of the parameter. */
+    readonly value: number;
+    /** Its interval. */
+    readonly interval: readonly [number, number];
+  };
 }
 
 /** Where a rule goes in the long run, against one of its parameters. */
@@ -75,7 +88,9 @@ export function attractor(rule: Rule, options: AttractorOptions): Attractor {
   const values = new Float64Array(columns * perColumn);
   const table = new Float64Array((discard + points) * width);
   const firsts = starts.map((start) => initialVector(rule, everywhere(rule, start)));
+  const tick = ticker(options, columns);
   for (let column = 0; column < columns; column++) {
+    tick();
     parameters[slot] = at[column]!;
     firsts.forEach((first, k) => {
       path(first, parameters, [], 0, discard + points - 1, table);

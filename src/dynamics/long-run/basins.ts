@@ -1,18 +1,23 @@
-import { normalCdf } from "../../numeric/index.js";
+import { normalCdf, type RunHooks, ticker } from "../../numeric/index.js";
 import type { Interval, Rule } from "../../rule/index.js";
 import { orbit } from "../cycle/cycle-points.js";
 import { oneStateOnly, unreadableOption } from "../refusals.js";
 import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.js";
 
-export interface BasinsOptions extends HeldSetting {
-  /** First values to look at. */
+export interface BasinsOptions extends HeldSetting, RunHooks {
+  /** Lowest and highest first value to look at. */
   readonly range: Interval;
-  /** Starts tried before borders are narrowed down; default 400. */
+  /** First values tried before borders are narrowed down; default 400. */
   readonly count?: number;
-  /** Periods until a start is taken to have arrived; default 3,000. */
+  /** Periods until a path is taken to have arrived; default 3,000. */
   readonly periods?: number;
   /** What is known of the first value: normal with this mean and standard deviation. */
-  readonly known?: { readonly mean: number; readonly sd: number };
+  readonly known?: {
+    /** Mean of the first value. */
+    readonly mean: number;
+    /** Standard deviation of the first value. */
+    readonly sd: number;
+  };
 }
 
 /** Where starts end up. */
@@ -93,7 +98,9 @@ export function basins(rule: Rule, options: BasinsOptions): Basins {
   const held = holdStep(rule, options, "basin");
   const scale = Math.max(Math.abs(within[0]), Math.abs(within[1]));
   const found: { readonly attractor: readonly number[]; readonly from: Interval[] }[] = [];
+  const tick = ticker(options, starts);
   const kindOf = (x: number): number => {
+    tick();
     const attractor = destination(held, x, periods);
     const known = found.findIndex((basin) => same(basin.attractor, attractor, scale));
     return known >= 0 ? known : found.push({ attractor, from: [] }) - 1;

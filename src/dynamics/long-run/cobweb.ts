@@ -5,8 +5,9 @@ import { type HeldSetting, holdStep } from "../setting/held-step.js";
 import { trajectory } from "../trajectory/trajectory.js";
 
 export interface CobwebOptions extends HeldSetting {
+  /** First value by state. */
   readonly initial: Readonly<Record<string, number>>;
-  /** Default 30. */
+  /** Periods shown; default 30. */
   readonly periods?: number;
 }
 

@@ -1,16 +1,20 @@
-import { studentQuantile } from "../../numeric/index.js";
+import { type RunHooks, studentQuantile, ticker } from "../../numeric/index.js";
 import type { Rule } from "../../rule/index.js";
 import { pathLeaves, unreadableOption } from "../refusals.js";
 import { type HeldSetting, type HeldStep, holdStep } from "../setting/held-step.js";
 import { type InitialValues, initialVector } from "../setting/setting.js";
 
-export interface LyapunovExponentOptions extends HeldSetting {
+export interface LyapunovExponentOptions extends HeldSetting, RunHooks {
+  /**
+   * First values by state, with lags a list, oldest first; those that the rule states or the fit estimates
+   * may be left out.
+   */
   readonly initial?: InitialValues;
-  /** Periods measured; default 100,000. */
+  /** Periods measured, at least 300; default 100,000. */
   readonly periods?: number;
   /** Periods left out at the beginning; default 1,000. */
   readonly discard?: number;
-  /** Default 0.95. */
+  /** Confidence level of the interval, between 0 and 1; default 0.95. */
   readonly level?: number;
 }
 
@@ -88,7 +92,11 @@ export function lyapunovExponent(rule: Rule, options: LyapunovExponentOptions = 
   const grown = gapFollower(held, initialVector(rule, options.initial));
   grown(discard);
   const size = Math.floor(periods / blocks);
-  const means = Float64Array.from({ length: blocks }, () => grown(size) / size);
+  const tick = ticker(options, blocks);
+  const means = Float64Array.from({ length: blocks }, () => {
+    tick();
+    return grown(size) / size;
+  });
   const value = means.reduce((sum, mean) => sum + mean, 0) / blocks;
   if (Number.isNaN(value) || value === Number.POSITIVE_INFINITY) throw pathLeaves("An exponent");
   const variance = means.reduce((sum, mean) => sum + (mean - value) ** 2, 0) / (blocks - 1);

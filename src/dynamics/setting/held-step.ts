@@ -4,6 +4,10 @@ import { heldInputs, parametersBySlot } from "./setting.js";
 
 /** Parameters, and inputs held at one value, for questions about the long run. */
 export interface HeldSetting {
+  /**
+   * Parameters by name; those that the rule holds fixed may be left out, and those of a fit are its
+   * estimates.
+   */
   readonly parameters?: Readonly<Record<string, number>>;
   /** By input: the value at which it stays. */
   readonly inputs?: Readonly<Record<string, number>>;

@@ -1,19 +1,19 @@
-import { randomStream } from "../../numeric/index.js";
+import { type RunHooks, randomStream, type Tick, ticker } from "../../numeric/index.js";
 import { type Fit, problemOf } from "../fit.js";
 import type { RecordDraw, Refitter } from "../problem/refitter.js";
-import { refuseFewDraws, refuseNotBySquares, refuseUnknownName } from "../refusals.js";
+import { groupError, refuseFewDraws, refuseNotBySquares, refuseUnknownName } from "../refusals.js";
 import type { GroupFit } from "../result/group-fit.js";
 import type { Interval } from "./interval.js";
 
 /** Options of `gridInterval`. */
-export interface GridIntervalOptions {
-  /** Group of the fit; default its first. */
+export interface GridIntervalOptions extends RunHooks {
+  /** Group of the fit; default its only one. */
   readonly group?: string;
   /** Simulated records at every value tried; default 399. */
   readonly resamples?: number;
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
-  /** Default that of the fit. */
+  /** Confidence level of the interval, between 0 and 1; default that of the fit. */
   readonly level?: number;
 }
 
@@ -34,7 +34,7 @@ const halvings = 10;
 export function gridInterval(fit: Fit, name: string, options: GridIntervalOptions = {}): Interval {
   const { resamples: draws = 399, seed = 1, level = problemOf(fit).level } = options;
   if (!(Number.isInteger(draws) && draws >= 20)) throw refuseFewDraws(draws);
-  const fitted = fit.groups.find((each) => each.group === (options.group ?? fit.groups[0]!.group))!;
+  const fitted = groupNamed(fit, options.group);
   const i = fitted.estimates.findIndex((each) => each.name === name);
   if (i < 0)
     throw refuseUnknownName(
@@ -45,12 +45,25 @@ export function gridInterval(fit: Fit, name: string, options: GridIntervalOption
   const group = problemOf(fit).group(fitted.group);
   const again = group.kind === "least-squares" ? group.refitter() : undefined;
   if (again?.draw === undefined) throw refuseNotBySquares("gridInterval");
-  const ordinary = ordinaryAt(again, again.draw, fitted, i, draws, seed);
+  const tick = ticker(options, 2 * (halvings + 2) * draws);
+  const ordinary = ordinaryAt(again, again.draw, fitted, i, { draws, seed, tick });
   const tail = (1 - level) / 2;
   const reach = reachOf(fitted, i);
   const lower = limit(fitted.estimates[i]!.value, -reach, (value) => 1 - ordinary(value) >= tail);
   const upper = limit(fitted.estimates[i]!.value, reach, (value) => ordinary(value) >= tail);
   return { kind: "grid", level, lower, upper, note: `${draws} simulated records a value, seed ${seed}` };
+}
+
+function groupNamed({ groups }: Fit, name: string | undefined): GroupFit {
+  const found = groups.find(
+    ({ group }) => group === (name ?? (groups.length === 1 ? groups[0]!.group : undefined)),
+  );
+  if (found === undefined)
+    throw groupError(
+      name,
+      groups.map(({ group }) => group),
+    );
+  return found;
 }
 
 /** Share of records simulated with unknown i at a value whose signed root lies at or below the fit's own. */
@@ -59,8 +72,7 @@ function ordinaryAt(
   draw: RecordDraw,
   fitted: GroupFit,
   i: number,
-  draws: number,
-  seed: number,
+  { draws, seed, tick }: { readonly draws: number; readonly seed: number; readonly tick: Tick },
 ): (value: number) => number {
   const signedRoot = (start: Float64Array, value: number): number => {
     const free = minimise(start);
@@ -76,8 +88,10 @@ function ordinaryAt(
     // The same draws at every value, so that the share changes smoothly with it.
     const stream = randomStream(seed);
     let below = 0;
-    for (let k = 0; k < draws; k++)
+    for (let k = 0; k < draws; k++) {
       if (draw(stream, { at: held.estimates, sigma }) && signedRoot(held.estimates, value) <= own) below++;
+      tick();
+    }
     return below / draws;
   };
 }

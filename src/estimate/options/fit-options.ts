@@ -12,9 +12,15 @@ export type ErrorDistribution = "normal" | "lognormal" | "poisson" | "negative-b
 
 /** Options of `fit`. */
 export interface FitOptions {
-  /** Has no default: a fit states what it assumes. */
+  /**
+   * Where the error lies: in the steps of the rule, in the observation of a value, or in both; it has no
+   * default, because a fit states what it assumes.
+   */
   readonly errors: ErrorKind;
-  /** Default `normal`. */
+  /**
+   * Distribution of the errors: equal scatter at every level, normal on the log scale, or counts; default
+   * "normal".
+   */
   readonly distribution?: ErrorDistribution;
   /**
    * Standard deviation of the errors where it is known, one number or the name of an input column that holds one for
@@ -25,7 +31,7 @@ export interface FitOptions {
   readonly sd?: number | string;
   /** Parameters held at a value. */
   readonly fixed?: Readonly<Record<string, number>>;
-  /** Lowest and highest admitted value by parameter or by initial state ("N[0]"). */
+  /** Lowest and highest admitted value, by parameter or by initial state ("N[0]"). */
   readonly bounds?: Readonly<Record<string, readonly [number, number]>>;
   /** Where the search begins, by parameter or initial state; what is not named is found from the record. */
   readonly start?: Readonly<Record<string, number>>;
@@ -34,17 +40,29 @@ export interface FitOptions {
    * trajectory fit estimates them.
    */
   readonly initial?: Readonly<Record<string, number | readonly number[]>>;
-  /** By state: the name of an unknown factor by which the record reads it, as `{ B: "q" }`: recorded = q * B. */
+  /**
+   * By state: the name of an unknown factor by which the record reads it, as `{ B: "q" }` for recorded = q *
+   * B.
+   */
   readonly factor?: Readonly<Record<string, string>>;
-  /** Lets values far off the rule count for less (Huber's weights), in fits by least squares; default false. */
+  /**
+   * Whether values far off the rule count for less (Huber's weights), in fits by least squares; default
+   * false.
+   */
   readonly robust?: boolean;
-  /** `separate` (default): every group on its own; `combined`: the same parameters for all; `mixed`: parameters that vary among them. */
+  /**
+   * Each group on its own, the same parameters for all, or parameters that vary among them; default
+   * "separate".
+   */
   readonly groups?: "separate" | "combined" | "mixed";
-  /** Intervals by profile (default), or none, where many fits are made and only estimates are wanted. */
+  /**
+   * Intervals by profile likelihood, or none where many fits are made and only estimates are wanted; default
+   * "profile".
+   */
   readonly intervals?: "profile" | "none";
-  /** Level of the intervals; default 0.95. */
+  /** Confidence level of the interval, between 0 and 1; default 0.95. */
   readonly level?: number;
-  /** Cut of the profile: small-sample F (default) or chi-square with sigma^2 = RSS/n. */
+  /** Cut of the profile: small-sample F, or chi-square with sigma^2 = RSS/n; default "F". */
   readonly cut?: "F" | "chi-square";
 }
 

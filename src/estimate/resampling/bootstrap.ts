@@ -1,4 +1,11 @@
-import { quantile, type RandomStream, randomStream } from "../../numeric/index.js";
+import {
+  quantile,
+  type RandomStream,
+  type RunHooks,
+  randomStream,
+  type Tick,
+  ticker,
+} from "../../numeric/index.js";
 import { type Fit, problemOf } from "../fit.js";
 import type { Interval } from "../intervals/interval.js";
 import type { RecordDraw, Refitter } from "../problem/refitter.js";
@@ -7,19 +14,20 @@ import type { GroupFit } from "../result/group-fit.js";
 import { type ResampledErrors, residualDraw } from "./residual-draw.js";
 
 /** Options of `bootstrap`. */
-export interface BootstrapOptions {
-  /** Normal errors (`parametric`, default), the fit's own residuals one by one, or in runs of neighbours (`block`). */
+export interface BootstrapOptions extends RunHooks {
+  /**
+   * Errors of the simulated records: normal, the fit's own residuals one by one, or in blocks of neighbours;
+   * default "parametric".
+   */
   readonly errors?: ResampledErrors;
-  /** Length of a run; default the cube root of the number of values, rounded up. */
+  /** Length of a block; default the cube root of the number of values, rounded up. */
   readonly block?: number;
   /** Refits a group; default 999. */
   readonly resamples?: number;
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
-  /** Default that of the fit. */
+  /** Confidence level of the intervals, between 0 and 1; default that of the fit. */
   readonly level?: number;
-  /** Told after every hundredth refit; a false answer stops the work, and what was drawn so far is used. */
-  readonly onProgress?: (done: number, of: number) => unknown;
 }
 
 /** How the estimates of one unknown scattered over the refits. */
@@ -58,6 +66,7 @@ export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
   if (!(Number.isInteger(resamples) && resamples >= 20)) throw refuseFewDraws(resamples);
   const problem = problemOf(fit);
   let stream = randomStream(seed);
+  const tick = ticker(options, fit.groups.length * resamples);
   let used = 0;
   const rows = fit.groups.flatMap((fitted) => {
     const own = stream;
@@ -66,7 +75,7 @@ export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
     if (again === undefined) throw refuseSharedParameters();
     const draw = errors === "parametric" ? again.draw : residualDraw(again, errors, options.block);
     if (draw === undefined) throw refuseNoDraws();
-    const refits = refitsOf(again, draw, { ...options, resamples }, own);
+    const refits = refitsOf(again, draw, resamples, tick, own);
     used += refits.length;
     return rowsOf(fitted, refits, options.level ?? problem.level);
   });
@@ -78,12 +87,13 @@ export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
 function refitsOf(
   { minimise, reported, at }: Refitter,
   draw: RecordDraw,
-  { resamples, onProgress }: BootstrapOptions & { resamples: number },
+  resamples: number,
+  tick: Tick,
   stream: RandomStream,
 ): readonly Float64Array[] {
   const found: Float64Array[] = [];
   for (let k = 0; k < resamples; k++) {
-    if (k % 100 === 0 && onProgress?.(k, resamples) === false) break;
+    tick();
     if (draw(stream) === undefined) continue;
     const { estimates, stop } = minimise(at);
     if (stop.kind === "converged") found.push(estimates.map((value, i) => reported(i, value)));

@@ -55,7 +55,8 @@ function undetermined(fit: Omit<GroupFit, "warnings">, { found }: FitContext): W
       ? `only a combination of ${together.map(({ name }) => name).join(" and ")} enters`
       : "no value of it changes the fit";
   const reason = (each: Estimate): string => {
-    if (hasRunOff(fit, each.value)) return "its best value lies beyond any limit";
+    const towards = found.unbounded[fit.estimates.indexOf(each)]!;
+    if (towards * each.value > 0) return "it has no finite optimum";
     return together.includes(each) ? combination : each.profile.note || "its profile has no limit";
   };
   return loose.map((each) => ({
@@ -84,18 +85,6 @@ function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">, logScale: boolean)
 
 const shown = (limit: number | undefined, none: string): string => limit?.toPrecision(3) ?? none;
 
-/** Parameters this many times beyond every value of the record, and beyond 1, have run off. */
-const runaway = 1e6;
-
-function hasRunOff(fit: Omit<GroupFit, "warnings">, value: number): boolean {
-  const most = fit.points.reduce((high, { observed }) => Math.max(high, Math.abs(observed)), 1);
-  return Math.abs(value) > runaway * most;
-}
-
-function valueShown(fit: Omit<GroupFit, "warnings">, value: number): string {
-  return hasRunOff(fit, value) ? "beyond any limit" : value.toPrecision(4);
-}
-
 function atBounds(fit: Omit<GroupFit, "warnings">, unknowns: Unknowns): Warning[] {
   return fit.estimates
     .filter((estimate, i) => estimate.value === unknowns.lower[i] || estimate.value === unknowns.upper[i])
@@ -108,7 +97,7 @@ function atBounds(fit: Omit<GroupFit, "warnings">, unknowns: Unknowns): Warning[
 function rivals(fit: Omit<GroupFit, "warnings">): Warning[] {
   if (fit.rivals.length === 0) return [];
   const told = fit.rivals.map(({ estimates, behind }) => {
-    const values = estimates.map((value, i) => `${fit.estimates[i]!.name} ${valueShown(fit, value)}`);
+    const values = estimates.map((value, i) => `${fit.estimates[i]!.name} ${value.toPrecision(4)}`);
     return `${values.join(", ")} (${behind.toFixed(2)} log-likelihood units behind)`;
   });
   return [

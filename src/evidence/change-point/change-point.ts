@@ -1,5 +1,5 @@
 import { type Fit, type FitOptions, fit as fitRule, problemOf } from "../../estimate/index.js";
-import { randomStream } from "../../numeric/index.js";
+import { type RunHooks, randomStream, ticker } from "../../numeric/index.js";
 import type { Observations } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
 import { refuseExact } from "../refit/refuse-exact.js";
@@ -7,14 +7,20 @@ import { refuseUnsearched } from "../refusals.js";
 import { type GroupChangePoint, groupChangePoint } from "./group-change-point.js";
 
 /** Options of `changePoint`; those of a fit by least squares, with errors in the process. */
-export interface ChangePointOptions extends Omit<FitOptions, "errors" | "intervals" | "distribution"> {
-  /** Normal errors on the natural scale (default) or on the log scale; counts are not searched for a break. */
+export interface ChangePointOptions
+  extends Omit<FitOptions, "errors" | "intervals" | "distribution">,
+    RunHooks {
+  /**
+   * Normal errors on the natural or on the log scale; counts are not searched for a break; default "normal".
+   */
   readonly distribution?: "normal" | "lognormal";
-  /** Least share of the record on either side of a break; default 0.15. */
+  /** Least share of the record on either side of a break, between 0 and 0.5; default 0.15. */
   readonly leastShare?: number;
-  /** Records without a break that the largest F is held against; default 399, with which 5% is met exactly. */
+  /**
+   * Records without a break that the largest F is held against; with 399 a test at 5% is exact; default 399.
+   */
   readonly resamples?: number;
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
 }
 
@@ -50,7 +56,7 @@ export function changePoint(
   observations: Observations,
   options: ChangePointOptions = {},
 ): ChangePoint {
-  const { leastShare = 0.15, resamples = 399, seed = 1, ...others } = options;
+  const { leastShare = 0.15, resamples = 399, seed = 1, onProgress, signal, ...others } = options;
   const level = options.level ?? 0.95;
   const fit = fitRule(rule, observations, { ...others, errors: "process", intervals: "none" });
   const { kind, distribution, groups: together } = problemOf(fit);
@@ -59,11 +65,12 @@ export function changePoint(
   if (kind !== "least-squares") throw refuseUnsearched("censored");
   if (together !== "separate" || options.robust === true) throw refuseUnsearched("together");
   refuseExact(fit);
+  const tick = ticker(options, fit.groups.length * resamples);
   let stream = randomStream(seed);
   const groups = fit.groups.map((group) => {
     const own = stream;
     stream = stream.jump();
-    return groupChangePoint(fit, group, { leastShare, draws: resamples, level }, own);
+    return groupChangePoint(fit, group, { leastShare, draws: resamples, level, tick }, own);
   });
   const sentence = groups.map((group) => group.sentence).join(" ");
   return {

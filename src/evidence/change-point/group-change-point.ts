@@ -1,5 +1,5 @@
 import { type Fit, type GroupFit, problemOf, type Refitter } from "../../estimate/index.js";
-import type { RandomStream } from "../../numeric/index.js";
+import type { RandomStream, Tick } from "../../numeric/index.js";
 import { labelAt } from "../../record/index.js";
 import { refuseNoDates, refuseUnsearched } from "../refusals.js";
 import { type BreakDate, breakScan } from "./break-scan.js";
@@ -41,6 +41,7 @@ export interface BreakSearch {
   readonly leastShare: number;
   readonly draws: number;
   readonly level: number;
+  readonly tick: Tick;
 }
 
 /** Looks for a break in one group. */
@@ -58,7 +59,7 @@ export function groupChangePoint(
   const scan = breakScan(again, again.minimisePart, dates);
   const best = scan.reduce((low, next) => (next.value < low.value ? next : low));
   const statistic = fRatio(group.sumOfSquares, best.value, count, size);
-  const probability = chanceOf(statistic, supremumDraw(again, again.draw, dates), search.draws, stream);
+  const probability = chanceOf(statistic, supremumDraw(again, again.draw, dates), search, stream);
   const found = {
     group: group.group,
     statistic,
@@ -107,11 +108,17 @@ function datedBy(
 }
 
 /** Share of drawn records without a break whose largest F reaches the statistic, the record itself counted in. */
-function chanceOf(statistic: number, draw: SupremumDraw, draws: number, stream: RandomStream): number {
+function chanceOf(
+  statistic: number,
+  draw: SupremumDraw,
+  { draws, tick }: BreakSearch,
+  stream: RandomStream,
+): number {
   let above = 1;
   let drawn = 1;
   for (let k = 0; k < draws; k++) {
     const largest = draw(stream);
+    tick();
     if (largest === undefined) continue;
     drawn++;
     if (largest >= statistic) above++;

@@ -1,5 +1,5 @@
 import type { Fit, GroupFit } from "../../estimate/index.js";
-import { type RandomStream, randomStream } from "../../numeric/index.js";
+import { type RandomStream, type RunHooks, randomStream, type Tick, ticker } from "../../numeric/index.js";
 import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseFewRefits } from "../refusals.js";
 import { type ErrorAdvice, errorAdvice } from "./error-advice.js";
@@ -10,12 +10,14 @@ import { concernsOf, verdictOf } from "./verdict.js";
 import { type Window, windows } from "./windows.js";
 
 /** Options of `check`. */
-export interface CheckOptions {
-  /** Records drawn from the fit and refitted; default 200, the least before an interval is quoted. */
+export interface CheckOptions extends RunHooks {
+  /** Records drawn from the fit and refitted, at least 50; default 200. */
   readonly resamples?: number;
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
 }
+
+type Settled = Required<Pick<CheckOptions, "resamples" | "seed">>;
 
 /** The checks of one group. */
 export interface GroupCheck {
@@ -36,7 +38,7 @@ export interface GroupCheck {
 export interface Check {
   readonly kind: "check";
   readonly fit: Fit;
-  readonly options: Required<CheckOptions>;
+  readonly options: Settled;
   readonly groups: readonly GroupCheck[];
   readonly sentence: string;
 }
@@ -60,11 +62,12 @@ export function check(fit: Fit, options: CheckOptions = {}): Check {
   if (!Number.isInteger(settings.resamples) || settings.resamples < leastRefits)
     throw refuseFewRefits(settings.resamples, leastRefits);
   refuseExact(fit);
+  const tick = ticker(options, fit.groups.length * (settings.resamples + 2 * adviceDraws));
   let stream = randomStream(settings.seed);
   const groups = fit.groups.map((group) => {
     const own = stream;
     stream = stream.jump();
-    return groupCheck(fit, group, settings, own);
+    return groupCheck(fit, group, settings.resamples, own, tick);
   });
   const named = (group: GroupCheck): string => (group.group === "" ? "" : `${group.group}: `);
   const sentence = groups.map((group) => `${named(group)}${group.sentence}`).join(" ");
@@ -77,19 +80,14 @@ export function check(fit: Fit, options: CheckOptions = {}): Check {
   };
 }
 
-function groupCheck(
-  fit: Fit,
-  group: GroupFit,
-  { resamples: refits }: Required<CheckOptions>,
-  stream: RandomStream,
-): GroupCheck {
+function groupCheck(fit: Fit, group: GroupFit, refits: number, stream: RandomStream, tick: Tick): GroupCheck {
   const found = {
     group: group.group,
     tests: residualTests(fit, group, stream.jump()),
     windows: windows(fit, group),
     lackOfFit: lackOfFit(fit, group),
-    recovery: recovery(fit, group, refits, stream),
-    errors: errorAdvice(fit, group, adviceDraws, stream),
+    recovery: recovery(fit, group, refits, stream, tick),
+    errors: errorAdvice(fit, group, adviceDraws, stream, tick),
   };
   const concerns = concernsOf(fit, group, found);
   return { ...found, concerns, sentence: verdictOf(group, found, concerns) };

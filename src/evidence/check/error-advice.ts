@@ -1,5 +1,5 @@
 import { type Fit, type GroupFit, problemOf, type RecordDraw, type Refitter } from "../../estimate/index.js";
-import { ModelError, type RandomStream } from "../../numeric/index.js";
+import { ModelError, type RandomStream, type Tick } from "../../numeric/index.js";
 import { autocorrelations } from "../statistics/autocorrelation.js";
 import { residualSeries } from "./residual-series.js";
 
@@ -42,6 +42,7 @@ export function errorAdvice(
   group: GroupFit,
   draws: number,
   stream: RandomStream,
+  tick: Tick = () => undefined,
 ): ErrorAdvice | undefined {
   const process = sideOf(fit, group, "process");
   const observation = sideOf(fit, group, "observation");
@@ -49,8 +50,8 @@ export function errorAdvice(
   const measure = differenceOf(process, observation);
   const difference = measure(process.again.recorded);
   const expected = {
-    process: expectedOf(process, measure, draws, stream),
-    observation: expectedOf(observation, measure, draws, stream),
+    process: expectedOf(process, measure, draws, stream, tick),
+    observation: expectedOf(observation, measure, draws, stream, tick),
   };
   const weight =
     1 /
@@ -117,12 +118,14 @@ function expectedOf(
   measure: (values: Float64Array) => number,
   draws: number,
   stream: RandomStream,
+  tick: Tick,
 ): { readonly mean: number; readonly deviation: number } {
   const found: number[] = [];
   for (let tries = 0; found.length < draws && tries < 2 * draws; tries++) {
     const values = draw(stream);
     const difference = values ? measure(values) : Number.NaN;
     if (Number.isFinite(difference)) found.push(difference);
+    tick();
   }
   const mean = found.reduce((sum, value) => sum + value, 0) / found.length;
   const squares = found.reduce((sum, value) => sum + (value - mean) ** 2, 0);

@@ -1,5 +1,5 @@
 import { type Fit, type GroupFit, problemOf } from "../../estimate/index.js";
-import { quantile, type RandomStream } from "../../numeric/index.js";
+import { quantile, type RandomStream, type Tick } from "../../numeric/index.js";
 
 /** How well one unknown is found again in records drawn from the fitted rule. */
 export interface RecoveredUnknown {
@@ -40,6 +40,7 @@ export function recovery(
   group: GroupFit,
   wanted: number,
   stream: RandomStream,
+  tick: Tick = () => undefined,
 ): Recovery | undefined {
   const { level, group: problemOfGroup } = problemOf(fit);
   const again = problemOfGroup(group.group).refitter();
@@ -49,6 +50,7 @@ export function recovery(
   let failed = 0;
   while (found.length < wanted && failed < wanted) {
     const refit = draw(stream) && minimise(at);
+    tick();
     if (refit === undefined || refit.stop.kind === "failed") failed++;
     else
       found.push({

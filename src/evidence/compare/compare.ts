@@ -1,4 +1,5 @@
 import { type Fit, problemOf } from "../../estimate/index.js";
+import { type RunHooks, ticker } from "../../numeric/index.js";
 import { type RollingOrigin, rollingOrigin } from "../forecasts/rolling-origin.js";
 import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseOneFit, refuseUnlikeErrors, refuseUnlikeRecords, refuseUnlikeStarts } from "../refusals.js";
@@ -8,12 +9,12 @@ import { fitLabels } from "./fit-labels.js";
 import { type LikelihoodRatio, likelihoodRatios } from "./likelihood-ratio.js";
 
 /** Options of `compare`. */
-export interface CompareOptions {
+export interface CompareOptions extends RunHooks {
   /** Rows from which each rival is fitted afresh and carried forward; default a third of the record, 12 at most. */
   readonly origins?: number;
   /** Periods forecast from each; default a tenth of the record. */
   readonly periods?: number;
-  /** Level of the forecasts' intervals; default 0.8. */
+  /** Confidence level of the forecasts' intervals, between 0 and 1; default 0.8. */
   readonly level?: number;
   /** What the client would be told by a fit; where rivals are not told apart, what each says is set side by side. */
   readonly decide?: (fit: Fit) => string;
@@ -80,7 +81,7 @@ export function compare(fits: readonly Fit[], options: CompareOptions = {}): Com
 
 function planOf(
   fit: Fit,
-  { origins, periods: horizon, level = 0.8 }: CompareOptions,
+  { origins, periods: horizon, level = 0.8, ...hooks }: CompareOptions,
 ): Parameters<typeof rollingOrigin>[1] {
   const rows = Math.min(...fit.observations.groups.map((group) => group.index.length));
   const count = origins ?? Math.min(12, Math.round(rows / 3));
@@ -88,6 +89,7 @@ function planOf(
     leftOut: Array.from({ length: count }, (_, i) => count - i),
     horizon: horizon ?? Math.max(1, Math.round(rows / 10)),
     level,
+    tick: ticker(hooks, fit.groups.length * count),
   };
 }
 

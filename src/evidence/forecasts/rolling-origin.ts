@@ -1,4 +1,5 @@
 import { type Fit, problemOf } from "../../estimate/index.js";
+import type { Tick } from "../../numeric/index.js";
 import type { ObservedGroup } from "../../record/index.js";
 import { fitLabels } from "../compare/fit-labels.js";
 import { type ForecastScores, type Scored, scoresOf } from "./forecast-scores.js";
@@ -27,6 +28,8 @@ export interface OriginPlan {
   readonly fitOnce?: boolean;
   readonly horizon: number;
   readonly level: number;
+  /** Called after each origin of each group. */
+  readonly tick?: Tick;
 }
 
 interface Target {
@@ -56,6 +59,7 @@ export function rollingOrigin(fits: readonly Fit[], plan: OriginPlan): RollingOr
       .map((origin) => {
         if (trained === undefined || !plan.fitOnce)
           trained = fits.map((fit) => fitUntil(fit, group.name, origin));
+        plan.tick?.();
         return forecastsAt(fits, trained, naive, group, origin, plan.horizon);
       })
       .filter((forecasts) => forecasts.length > 0);

@@ -13,21 +13,27 @@ export interface Effort {
   readonly takenFrom: string | undefined;
   /** Recorded inputs that no rule named in the answer reads. */
   readonly unread: readonly string[];
+  /** Whether no distribution was given. */
+  readonly assumedNormal: boolean;
 }
 
 /** What a proposal comes to, as a client would be told, and the price of having looked at many. */
 export function proposalWords(
   found: Found,
-  { tried, heldOut, takenFrom, unread }: Effort,
+  { tried, heldOut, takenFrom, unread, assumedNormal }: Effort,
 ): Pick<Proposal, "sentence" | "notes"> {
   const notes = [
     `${tried} fits were tried. Among so many the best owes part of its lead to chance: leads below ${supportedWithin} in AICc are no evidence, and a rule must be ${aheadOfNaive} ahead of "no change" and "mean level".`,
+    ...(assumedNormal ? [normalNote] : []),
     ...takenNote(takenFrom),
     ...adviceNote(found),
     ...heldOutNote(found, heldOut),
   ];
   return { sentence: `${sentenceOf(found)}${unreadWords(unread)}`, notes };
 }
+
+const normalNote =
+  'No distribution was given, so errors are normal with the same standard deviation at every level, as in `fit`. Where the scatter grows with the level, give distribution: "lognormal".';
 
 function takenNote(takenFrom: string | undefined): string[] {
   if (takenFrom === undefined) return [];

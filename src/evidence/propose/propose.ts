@@ -1,10 +1,11 @@
 import { type Fit, type FitOptions, problemOf } from "../../estimate/index.js";
+import { type RunHooks, type Tick, ticker } from "../../numeric/index.js";
 import type { Observations } from "../../record/index.js";
 import { ruleLabel } from "../../rule/index.js";
 import type { ErrorAdvice } from "../check/error-advice.js";
 import { refuseExact } from "../refit/refuse-exact.js";
 import { refuseNothingFits } from "../refusals.js";
-import { adviceOn } from "./advice-on.js";
+import { adviceDraws, adviceOn } from "./advice-on.js";
 import { candidatesFor, type NotTried } from "./candidates.js";
 import { catchInput, catchSymbol } from "./catch-input.js";
 import { holdOut } from "./hold-out.js";
@@ -14,12 +15,12 @@ import { type Standing, supportedRules } from "./supported-rules.js";
 import { type Tried, tryRules } from "./try-rules.js";
 
 /** Options of `propose`; others are those of a fit. */
-export interface ProposeOptions extends Omit<FitOptions, "errors" | "intervals"> {
-  /** Default: the only state. */
+export interface ProposeOptions extends Omit<FitOptions, "errors" | "intervals">, RunHooks {
+  /** Name of the state; default the only one. */
   readonly state?: string;
   /** Where the error lies; without it both are tried, and the record says which, or that it cannot. */
   readonly errors?: "process" | "observation";
-  /** Default 1. */
+  /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
 }
 
@@ -78,16 +79,16 @@ export interface Proposal {
  * @example propose(counts, { distribution: "lognormal" }).verdict.kind; // "undecided"
  */
 export function propose(observations: Observations, options: ProposeOptions = {}): Proposal {
-  const { state, errors, seed = 1, ...others } = options;
+  const { state, errors, seed = 1, onProgress, signal, ...others } = options;
   const { record, takenFrom } = catchInput(oneState(observations, state));
   const positive = record.groups.every((group) =>
     Object.values(group.values)[0]!.every((value) => value > 0),
   );
-  const distribution = others.distribution ?? (positive ? "lognormal" : "normal");
   const { candidates, left } = candidatesFor(record.inputs);
   const usable = candidates.filter((candidate) => positive || candidate.anyLevel);
   const kinds = errors === undefined ? (["process", "observation"] as const) : [errors];
-  const { tried, failed } = tryRules(usable, record, kinds, { ...others, distribution });
+  const tick = ticker(options, usable.length * kinds.length + (errors === undefined ? 4 * adviceDraws : 0));
+  const { tried, failed } = tryRules(usable, record, kinds, others, tick);
   if (tried.length === 0) throw refuseNothingFits(failed[0]?.reason ?? "no rule suits its levels");
   for (const { fit } of tried) refuseExact(fit);
   const barred = candidates.filter((candidate) => !usable.includes(candidate));
@@ -96,20 +97,24 @@ export function propose(observations: Observations, options: ProposeOptions = {}
     ...failed,
     ...left,
   ];
-  return judged({ record, takenFrom, tried, seed, errors, notTried });
+  const assumedNormal = others.distribution === undefined;
+  return judged({ record, takenFrom, assumedNormal, tried, seed, errors, notTried, tick });
 }
 
 interface Trial {
   readonly record: Observations;
   readonly takenFrom: string | undefined;
+  /** Whether no distribution was given. */
+  readonly assumedNormal: boolean;
   readonly tried: readonly Tried[];
   readonly notTried: readonly NotTried[];
   readonly errors: ProposeOptions["errors"];
   readonly seed: number;
+  readonly tick: Tick;
 }
 
-function judged({ record, takenFrom, tried, notTried, errors, seed }: Trial): Proposal {
-  const advice = errors === undefined ? adviceOn(tried, seed) : undefined;
+function judged({ record, takenFrom, assumedNormal, tried, notTried, errors, seed, tick }: Trial): Proposal {
+  const advice = errors === undefined ? adviceOn(tried, seed, tick) : undefined;
   const chosen = errors ?? advice?.kind ?? "undecided";
   const kinds = chosen === "undecided" ? (["process", "observation"] as const) : [chosen];
   const standings = kinds.flatMap((kind) => supportedRules(tried.filter((each) => each.errors === kind)));
@@ -133,7 +138,13 @@ function judged({ record, takenFrom, tried, notTried, errors, seed }: Trial): Pr
   const unread = record.inputs
     .filter((input) => !told.some(({ fit }) => fit.rule.inputs.includes(input)))
     .map((input) => (input === catchSymbol ? (takenFrom ?? input) : input));
-  const words = proposalWords(result, { tried: tried.length, heldOut: held?.values, takenFrom, unread });
+  const words = proposalWords(result, {
+    tried: tried.length,
+    heldOut: held?.values,
+    takenFrom,
+    unread,
+    assumedNormal,
+  });
   return { kind: "proposal", ...result, ...words };
 }
 

@@ -1,5 +1,5 @@
 import { type Fit, type FitOptions, fit as fitRule, freeUnknowns } from "../../estimate/index.js";
-import { ModelError } from "../../numeric/index.js";
+import { ModelError, type Tick } from "../../numeric/index.js";
 import type { Observations } from "../../record/index.js";
 import { type NaiveCriterion, naiveCriteria } from "../compare/naive-criteria.js";
 import type { Candidate, NotTried } from "./candidates.js";
@@ -25,6 +25,7 @@ export function tryRules(
   observations: Observations,
   kinds: readonly ("process" | "observation")[],
   options: Omit<FitOptions, "errors">,
+  tick: Tick,
 ): { readonly tried: readonly Tried[]; readonly failed: readonly NotTried[] } {
   const tried: Tried[] = [];
   const failed: NotTried[] = [];
@@ -38,6 +39,7 @@ export function tryRules(
           bounds: { ...bounds, ...options.bounds },
         }),
       );
+      tick();
       if (typeof fit === "string") failed.push({ name, reason: fit });
       else tried.push(described(name, errors, fit));
     }

@@ -9,13 +9,15 @@ import { type ResidualSystem, residualSystem } from "./residual-system.js";
 export interface LeastSquaresProblem {
   /** Residuals [rows] at parameters [size]; NaN where the model is not defined. */
   readonly residuals: (parameters: Float64Array) => ArrayLike<number>;
-  /** Derivative of every residual by every parameter, row-major [rows, size]; by differences when absent. */
+  /** Derivative of every residual by every parameter, row-major [rows, size]; default central differences. */
   readonly jacobian?: (parameters: Float64Array) => ArrayLike<number>;
+  /** Values of the parameters where the search begins. */
   readonly start: ArrayLike<number>;
-  /** Lowest and highest admitted values; open when absent. A parameter with equal bounds is held there. */
+  /** Lowest admitted values; a parameter with equal limits is held there; default no limit. */
   readonly lower?: ArrayLike<number>;
+  /** Highest admitted values; a parameter with equal limits is held there; default no limit. */
   readonly upper?: ArrayLike<number>;
-  /** Typical size of each parameter, for difference steps about 0; by default its own value tells. */
+  /** Typical size of each parameter, for difference steps about 0; default its own value. */
   readonly scale?: ArrayLike<number>;
 }
 

@@ -4,14 +4,15 @@ import { noDecision, noSuchRow, reasonMissing } from "./refusals.js";
 
 /** A correction to make; the record itself stays as it was read. */
 export interface Correction {
-  /** 1-based row of the record, header not counted. */
+  /** Row of the record, 1 for the first below the header. */
   readonly row: number;
-  /** Absent: the whole row is left out. */
+  /** Column of the cell; without it the whole row is left out. */
   readonly column?: string;
-  /** The value to use instead; null or absent: the cell counts as missing. */
+  /** Value to use instead; null, or nothing, where the cell counts as missing. */
   readonly now?: unknown;
   /** Why; a correction without a reason is refused. */
   readonly why: string;
+  /** Who decided. */
   readonly who?: string;
 }
 

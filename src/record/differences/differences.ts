@@ -6,11 +6,11 @@ import { noPairs } from "./refusals.js";
 
 /** Which differences to take. */
 export interface DifferenceOptions {
-  /** How many times; default 1. A second difference needs three rows without a gap. */
+  /** How many times differences are taken; a second difference needs three rows without a gap; default 1. */
   readonly order?: number;
-  /** How many steps apart the two rows lie; default 1, where a gap gives a multi-step pair. */
+  /** How many steps apart the two rows lie; with 1 a gap gives a multi-step pair; default 1. */
   readonly lag?: number;
-  /** What `difference` holds: the change (default "step"), the change per value, or of logarithms. */
+  /** What `difference` holds: the change, the change per value, or that of logarithms; default "step". */
   readonly per?: "step" | "value" | "log";
   /** Steps in a season, 12 for months of a year: first takes the difference to the season before. */
   readonly seasonal?: number;

@@ -12,7 +12,9 @@ export type FillRule = "previous" | "between" | number;
 
 /** What to fill, and by which rule. */
 export interface FillOptions extends PeriodsOf {
+  /** Column to fill. */
   readonly column: string;
+  /** Value of an empty cell: the one before, a line between its neighbours, or a number. */
   readonly with: FillRule;
 }
 

@@ -13,8 +13,11 @@ import { duplicatePeriod } from "../series/refusals.js";
 
 /** Where the rows of a table stand: its period column, the length of a step, and what tells series apart. */
 export interface PeriodsOf {
+  /** The period column; or a year column and one that numbers periods within it: `["year", "week"]`. */
   readonly period: string | readonly [string, string];
+  /** Length of one step, or a calendar; required, because none is assumed. */
   readonly step?: StepLength | CalendarName;
+  /** Columns that tell series apart: flasks, loans, items. */
   readonly by?: string | readonly string[];
 }
 

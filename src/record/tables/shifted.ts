@@ -6,10 +6,11 @@ import { withColumn } from "./with-column.js";
 
 /** What to shift. */
 export interface ShiftOptions extends PeriodsOf {
+  /** Column to shift. */
   readonly column: string;
-  /** Periods back (negative: ahead); default 1. */
+  /** Periods back, or with a minus ahead; default 1. */
   readonly steps?: number;
-  /** Of the new column; default "stock, 1 before". */
+  /** Name of the new column; default "owed, 1 before". */
   readonly name?: string;
 }
 

@@ -11,6 +11,7 @@ import { type Summary, summaryOf } from "./summary-of.js";
 
 /** Which longer period to count by, and how each column is taken over it. */
 export interface ToPeriodsOptions extends PeriodsOf {
+  /** Length of the longer periods, or their calendar. */
   readonly to: StepLength | CalendarName;
   /** By column, how its values become one. */
   readonly take?: Readonly<Record<string, Summary>>;

@@ -5,7 +5,7 @@ import { twoCells } from "./refusals.js";
 
 /** How a long table becomes a wide one. */
 export interface WiderOptions {
-  /** Columns that name a row of the wide table, such as the period. */
+  /** Columns that stay, such as the period. */
   readonly keep: string | readonly string[];
   /** Column whose cells become column names. */
   readonly names: string;
@@ -17,9 +17,9 @@ export interface WiderOptions {
 export interface LongerOptions {
   /** Columns that stay; every other one becomes rows. */
   readonly keep: string | readonly string[];
-  /** Of the new column of names. */
+  /** Name of the new column of names. */
   readonly names: string;
-  /** Of the new column of values. */
+  /** Name of the new column of values. */
   readonly values: string;
 }
 

@@ -7,13 +7,15 @@ import { withColumn } from "./with-column.js";
 
 /** Which window to summarise, and how. */
 export interface WindowOptions extends PeriodsOf {
+  /** Column to summarise. */
   readonly column: string;
-  /** Periods in the window, this one included; absent: all from the first row of the series on. */
+  /** Periods in the window, this one included. */
   readonly over?: number;
+  /** What is taken of the values in a window. */
   readonly take: Summary;
-  /** Fewest values a window needs; default: every period of it (one, in a window from the first row on). */
+  /** Fewest values a window needs; default every period of it (one, in a window from the first row on). */
   readonly needed?: number;
-  /** Of the new column; default "mean of stock over 4". */
+  /** Name of the new column; default "mean of sold over 4". */
   readonly name?: string;
 }
 

@@ -1,5 +1,6 @@
 /** Time lag in whole periods. */
 export interface LagOption {
+  /** Delay in whole periods. */
   readonly lag: number;
 }
 

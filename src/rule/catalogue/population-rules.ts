@@ -131,6 +131,7 @@ const competition: CatalogueEntry = {
 
 /** The lag of recruitment, and whether more adults always mean more recruits. */
 export interface RecruitOption extends LagOption {
+  /** Whether more adults always mean more recruits, or too many mean fewer; default "rising". */
   readonly recruits?: "rising" | "humped";
 }
 

@@ -7,7 +7,7 @@ import type { LagOption } from "./lag.js";
 import * as linear from "./linear-rules.js";
 import type { RecruitOption } from "./population-rules.js";
 import * as population from "./population-rules.js";
-import type { PerishableOption, StageOption } from "./stage-rules.js";
+import type { AgesOption, PerishableOption, StageOption } from "./stage-rules.js";
 import * as stage from "./stage-rules.js";
 import * as stock from "./stock-rules.js";
 
@@ -48,7 +48,7 @@ export interface RuleCatalogue {
   readonly clumpedParasitoid: PlainRule;
   readonly competition: PlainRule;
   readonly adultsAndRecruits: (options: NamedRuleOptions & RecruitOption) => Rule;
-  readonly ages: (options: NamedRuleOptions & { readonly ages: number }) => Rule;
+  readonly ages: (options: NamedRuleOptions & AgesOption) => Rule;
   readonly stages: (options: NamedRuleOptions & StageOption) => Rule;
 }
 

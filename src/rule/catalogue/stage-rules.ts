@@ -50,8 +50,9 @@ function ages(count: number): CatalogueEntry {
 
 /** Names of stages, and the possible moves between them; the fraction of a move not listed is zero. */
 export interface StageOption {
+  /** Names of the stages. */
   readonly stages: readonly string[];
-  /** Pairs [from, to]; default every pair. */
+  /** Moves that may happen, as pairs [from, to]; default every pair. */
   readonly moves?: readonly (readonly [from: string, to: string])[];
 }
 
@@ -88,7 +89,9 @@ function stages({ stages: names, moves }: StageOption): CatalogueEntry {
 
 /** Shelf life in periods, and which goods are issued first. */
 export interface PerishableOption {
+  /** Periods that goods last. */
   readonly life: number;
+  /** Which goods are given out first; default "oldest-first". */
   readonly issue?: "oldest-first" | "newest-first";
 }
 
@@ -128,8 +131,14 @@ function perishable(life: number, issue: "oldest-first" | "newest-first"): Catal
   };
 }
 
+/** How finely ages are told apart. */
+export interface AgesOption {
+  /** Number of age classes. */
+  readonly ages: number;
+}
+
 /** n1' = f1 n1 + f2 n2 + ..., n2' = s1 n1, ... */
-export const agesRule = ({ ages: count, ...options }: NamedRuleOptions & { readonly ages: number }): Rule =>
+export const agesRule = ({ ages: count, ...options }: NamedRuleOptions & AgesOption): Rule =>
   catalogueRule(ages(count), options);
 /** v' = P v, one fraction p_from_to for each move. */
 export const stagesRule = ({ stages: names, moves, ...options }: NamedRuleOptions & StageOption): Rule =>

@@ -1,0 +1,1 @@
+export { checkCall } from "./check-call.js";
