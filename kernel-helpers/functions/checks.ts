@@ -26,9 +26,9 @@ export function check(fit: Fit, options: CheckOptions = {}): Check {
   return showing(presentFitIn(checked), () =>
     shownTogether([
       testsTable(checked),
-      ...residualPanels(fit),
-      recoveryTable(checked),
-      windowsTable(checked),
+      ...residualPanels(fit, checked.options.seed),
+      ...(checked.groups.some(({ recovery }) => recovery) ? [recoveryTable(checked)] : []),
+      ...(checked.groups.some(({ windows }) => windows.length > 0) ? [windowsTable(checked)] : []),
     ]),
   );
 }

@@ -35,7 +35,7 @@ export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum
 }
 
 /**
- * What an answer hangs on: its change for one standard error and for ten per cent of each parameter, in two charts,
+ * What an answer is sensitive to: its change for one standard error and for ten per cent of each parameter, in two charts,
  * and the elasticities.
  *
  * @example sensitivity(fitted, { periods: 12, answer: { time: "N", risesTo: 600 } }).rows.length // 3
@@ -43,7 +43,7 @@ export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum
 export function sensitivity(subject: Fit | Rule, options: SensitivityOptions): Sensitivity {
   checkCall("sensitivity", arguments);
   const found = seededRun("Sensitivity", options, (own) => sensitivityOf(subject, own));
-  caseLog.noteStep(`asked what ${found.measure} hangs on`);
+  caseLog.noteStep(`asked how sensitive ${found.measure} is`);
   return showing(found, () => shownTogether(showSensitivity(found)));
 }
 

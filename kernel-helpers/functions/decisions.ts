@@ -45,8 +45,14 @@ export function timeToReach(ahead: Forecast | Simulation, options: TimeToReachOp
 export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
   checkCall("solveFor", arguments);
   const found = seededRun("Solving", options, (own) => solveForSetting(subject, own));
-  caseLog.noteStep(`asked what ${found.vary} brings ${found.measure} to its target`);
+  caseLog.noteStep(`asked what ${found.vary} brings ${found.measure} ${aimWords(found)}`);
   return showing(found, () => shownTogether(showSolved(found)));
+}
+
+/** "to 0", "to at most 120": the target that was asked for. */
+function aimWords({ target }: Solved): string {
+  if (target.is !== undefined) return `to ${target.is}`;
+  return target.atMost === undefined ? `to at least ${target.atLeast}` : `to at most ${target.atMost}`;
 }
 
 /**

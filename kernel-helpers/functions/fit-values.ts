@@ -1,7 +1,8 @@
 import type { Fit, GroupFit } from "../../src/estimate/index.js";
 import { labelAt } from "../../src/record/index.js";
 import type { Rule } from "../../src/rule/index.js";
-import { groupNamed, onlyGroup } from "../results/index.js";
+import { whichGroupError } from "../options/index.js";
+import { groupNamed } from "../results/index.js";
 import { showing } from "../tables/index.js";
 import { escapeHtml, joinSentences, list } from "../wording/index.js";
 import type { Shown } from "./show.js";
@@ -31,7 +32,10 @@ export type ResultFor<Asked extends Subject, Result> = Asked extends Fit ? Resul
 
 /** The group of a fit whose estimates are taken. */
 export function groupOf({ groups }: Fit, name: string | undefined): GroupFit {
-  return name === undefined ? onlyGroup("fit", "values", groups) : groupNamed("fit", groups, name);
+  if (name !== undefined) return groupNamed("fit", groups, name);
+  const [only] = groups;
+  if (only === undefined || groups.length > 1) throw whichGroupError(groups.map(({ group }) => group));
+  return only;
 }
 
 /** First values by state of a fit, oldest first where the rule reads past ones. */

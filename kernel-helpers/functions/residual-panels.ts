@@ -1,5 +1,5 @@
 import { type Fit, type GroupFit, problemOf } from "../../src/estimate/index.js";
-import { normalQuantile } from "../../src/numeric/index.js";
+import { normalQuantile, randomStream } from "../../src/numeric/index.js";
 import { ruleLabel } from "../../src/rule/index.js";
 import { type Figure, figure, type Panel } from "../figures/index.js";
 import { acrossRecord } from "./across-periods.js";
@@ -7,15 +7,22 @@ import { acrossRecord } from "./across-periods.js";
 type Point = GroupFit["points"][number];
 
 /**
- * Residuals looked at four ways, a figure for each state: against the period, against the fitted value, each against
- * the one before, and in order against a normal sample.
+ * The residuals that are tested looked at four ways, a figure for each state: against the period, against the fitted
+ * value, each against the one before, and in order against a normal sample.
+ *
+ * @param seed - of randomised quantile residuals.
  */
-export function residualPanels(fit: Fit): readonly Figure[] {
+export function residualPanels(fit: Fit, seed: number): readonly Figure[] {
   const several = fit.rule.states.length > 1;
+  const tested = fit.groups.map((group) => {
+    const problem = problemOf(fit).group(group.group);
+    const residuals = problem.residuals(problem.tested, randomStream(seed));
+    return group.points.map((point, i) => ({ ...point, residual: residuals[i]! }));
+  });
   return fit.rule.states.map((state) => {
-    const groups = fit.groups.map((group) => ({
+    const groups = fit.groups.map((group, g) => ({
       name: group.group === "" ? "residual" : group.group,
-      points: group.points.filter((point) => point.state === state),
+      points: tested[g]!.filter((point) => point.state === state && Number.isFinite(point.residual)),
     }));
     return figure({
       title: `Residuals of ${ruleLabel(fit.rule)}${several ? `, ${state}` : ""}`,
@@ -34,8 +41,7 @@ interface Series {
 function panelsOf(fit: Fit, state: string, groups: readonly Series[]): Panel[] {
   const { states } = fit.observations;
   const unit = states.find((each) => each.name === state)?.unit ?? "";
-  const { log } = problemOf(fit).scale;
-  const residual = { title: log ? "Residual of the logarithm" : "Residual", unit: log ? "" : unit };
+  const residual = residualAxis(fit, unit);
   const before = groups.map(({ name, points }) => ({ name, pairs: neighbours(points) }));
   const zero = { mark: "threshold", name: "zero", y: 0, inLegend: false } as const;
   const points = (
@@ -106,6 +112,14 @@ function panelsOf(fit: Fit, state: string, groups: readonly Series[]): Panel[] {
       layers: groups.flatMap((g, i) => normalLayers(g, i, points)),
     },
   ];
+}
+
+/** What the residuals are called, and their unit. */
+function residualAxis(fit: Fit, unit: string): { readonly title: string; readonly unit: string } {
+  const { kind, scale } = problemOf(fit);
+  if (kind === "likelihood") return { title: "Quantile residual", unit: "standard deviations" };
+  if (kind === "state-space") return { title: "Prediction error", unit: "standard deviations" };
+  return scale.log ? { title: "Residual of the logarithm", unit: "" } : { title: "Residual", unit };
 }
 
 const residuals = (group: Series): number[] => group.points.map((point) => point.residual);

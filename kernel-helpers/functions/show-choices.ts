@@ -37,7 +37,7 @@ export function showBest(found: Optimum): readonly (Figure | Table)[] {
 export function showSensitivity(found: Sensitivity): readonly (Figure | Table)[] {
   const answer = { title: `Change of ${found.measure}`, unit: found.unit };
   const open = found.rows.filter((row) => row.errorLower !== undefined && row.errorUpper !== undefined);
-  const title = `What ${found.measure} hangs on`;
+  const title = `Sensitivity of ${found.measure}`;
   const change = (value: number): number => (Number.isFinite(value) ? value - found.answer : Number.NaN);
   const errors =
     open.length === 0
@@ -83,6 +83,16 @@ function sensitivityTable(found: Sensitivity): Table {
       { key: "errorUpper", label: "higher", ...answer },
       { key: "tenthLower", label: "Ten per cent lower", ...answer },
       { key: "tenthUpper", label: "higher", ...answer },
+      ...(found.rows.some((row) => row.tenthError > 0)
+        ? [
+            {
+              key: "tenthError",
+              label: "Monte-Carlo error of the difference",
+              kind: "number",
+              digits: 1,
+            } as const,
+          ]
+        : []),
       { key: "elasticity", label: "Elasticity", kind: "number", digits: 3 },
     ],
     rows: found.rows.map((row) => ({
@@ -96,19 +106,25 @@ function sensitivityTable(found: Sensitivity): Table {
   });
 }
 
+/** A time that is never reached, and a number that no path has, in words. */
+const shownAnswer = (value: number): number | string => {
+  if (Number.isNaN(value)) return "no path in range";
+  return Number.isFinite(value) ? value : "never";
+};
+
 /** One curve an answer, and all of them in a table. */
 export function showTradeoff(found: Tradeoff): readonly (Figure | Table)[] {
   const names = Object.keys(found.answers);
   const settings = found.rows.map((row) => row.value);
-  const isProbability = (name: string): boolean => "probability" in found.answers[name]!;
-  const columns = names.flatMap((name): Column[] =>
-    isProbability(name)
-      ? [
-          { key: name, label: name, kind: "probability", pairedWith: `${name} error` },
-          { key: `${name} error`, label: "Monte-Carlo error", kind: "number", digits: 1 },
-        ]
-      : [{ key: name, label: name, kind: "number", digits: 5 }],
-  );
+  const isShare = (name: string): boolean =>
+    "probability" in found.answers[name]! || "share" in found.answers[name]!;
+  const columns = names.flatMap((name): Column[] => {
+    const simulated = found.rows.some((row) => row.errors[name]! > 0);
+    const error: Column = { key: `${name} error`, label: "Monte-Carlo error", kind: "number", digits: 1 };
+    if (isShare(name)) return [{ key: name, label: name, kind: "probability", pairedWith: error.key }, error];
+    return [{ key: name, label: name, kind: "number", digits: 5 }, ...(simulated ? [error] : [])];
+  });
+  const left = found.rows.some((row) => row.left > 0);
   return [
     figure({
       title: `Choices of ${found.vary}`,
@@ -124,12 +140,16 @@ export function showTradeoff(found: Tradeoff): readonly (Figure | Table)[] {
       columns: [
         { key: "setting", label: found.vary, kind: "number", digits: 6, unit: found.unit },
         ...columns,
+        ...(left
+          ? [{ key: "left", label: "Share of paths out of range", kind: "probability" } as const]
+          : []),
       ],
       rows: found.rows.map((row) => ({
         setting: row.value,
+        left: row.left,
         ...Object.fromEntries(
           names.flatMap((name) => [
-            [name, Number.isFinite(row.answers[name]) ? row.answers[name] : "never"],
+            [name, shownAnswer(row.answers[name]!)],
             [`${name} error`, row.errors[name]],
           ]),
         ),

@@ -1,7 +1,7 @@
 import {
-  amount,
   type GroupReach,
   type NextReading,
+  reachedLevel,
   type Solved,
   type TimeToReach,
 } from "../../src/decision/index.js";
@@ -16,6 +16,12 @@ import { decidingFan } from "./show-forecast.js";
 
 const percent = (level: number): string => `${Number((100 * level).toPrecision(12))}%`;
 
+/** What is to be said of the time of a reading. */
+function remarkOf({ tooLate, withinRecord }: NextReading["choices"][number]): string {
+  if (tooLate) return "after the event: too late";
+  return withinRecord ? "within the record: kept samples only" : "ahead";
+}
+
 /** The answer to "when": a table of groups, and the distribution over periods where chance has a part. */
 export function showReach(found: TimeToReach, ahead: Forecast | Simulation): readonly (Table | Figure)[] {
   const figures = found.groups.some((group) => group.distribution.length > 1)
@@ -23,8 +29,8 @@ export function showReach(found: TimeToReach, ahead: Forecast | Simulation): rea
     : [];
   const name = `the level ${amountWords(found)}`;
   const fans =
-    ahead.kind === "forecast"
-      ? [decidingFan(ahead, found.state, { value: levelSide(found).value, name }, eventWords(found))]
+    ahead.kind === "forecast" && ahead.fit.rule.states.includes(found.state)
+      ? [decidingFan(ahead, found.state, { value: found.groups[0]!.levelAt, name }, eventWords(found))]
       : [];
   return [reachTable(found, ahead.groups[0]!.axis), ...fans, ...figures];
 }
@@ -64,11 +70,11 @@ function reachTable(found: TimeToReach, axis: PeriodAxis): Table {
   }
 }
 
-/** "A: there by hour 372 in 99.0% of draws (Monte-Carlo error 0.2%)". */
+/** "A: there by hour 372 in 99.0% of paths (Monte-Carlo error 0.2%)". */
 function eventWords(found: TimeToReach): string {
   const each = found.groups.map((group) => {
     const name = groupName(group);
-    const share = `${(100 * (1 - group.never)).toFixed(1)}% of draws (Monte-Carlo error ${(100 * group.neverError).toFixed(1)}%)`;
+    const share = `${(100 * (1 - group.never)).toFixed(1)}% of paths (Monte-Carlo error ${(100 * group.neverError).toFixed(1)}%)`;
     return `${name === "" ? "" : `${name}: `}there by ${group.words.lastPeriod} in ${share}`;
   });
   const [first = "", ...rest] = each;
@@ -76,7 +82,7 @@ function eventWords(found: TimeToReach): string {
 }
 
 const never: readonly Column[] = [
-  { key: "never", label: "Share of draws never there", kind: "probability", pairedWith: "neverError" },
+  { key: "never", label: "Share of paths never there", kind: "probability", pairedWith: "neverError" },
   { key: "neverError", label: "Monte-Carlo error", kind: "number", digits: 1 },
 ];
 
@@ -93,7 +99,7 @@ function timesOf(group: GroupReach, dated: boolean): Readonly<Record<string, num
 
 /** "120 ×10⁴ cells/mL", as the sentence has it. */
 function amountWords(found: TimeToReach): string {
-  return amount(`${levelSide(found).value}`, found.unit);
+  return reachedLevel(found, found.groups[0]!);
 }
 
 /** "falls to 0 EUR". */
@@ -110,10 +116,10 @@ function reachFigure(found: TimeToReach, ahead: Forecast | Simulation): Figure {
   return figure({
     title: `By when ${found.state} is at or past ${amountWords(found)}`,
     x: { ...across, title: "First period" },
-    y: { title: "Share of draws there by then", ends: [0, 1] },
+    y: { title: "Share of paths there by then", ends: [0, 1] },
     layers: found.groups.map((group) => ({
       mark: "line",
-      name: groupName(group) || "draws",
+      name: groupName(group) || "paths",
       x: group.distribution.map((row) => row.time),
       y: group.distribution.map((row) => row.by),
       stepped: true,
@@ -124,7 +130,7 @@ function reachFigure(found: TimeToReach, ahead: Forecast | Simulation): Figure {
 /** The answer to "what setting": one row a solution. */
 export function showSolved(found: Solved): readonly Table[] {
   const setting = { kind: "number", digits: 8, unit: found.unit } as const;
-  const without = "probability" in found.target ? "simulated" : "exact";
+  const without = found.simulated ? "simulated" : "exact";
   return [
     table({
       title: `What ${found.vary} must be`,
@@ -133,10 +139,10 @@ export function showSolved(found: Solved): readonly Table[] {
         { key: "lower", label: `Interval ${percent(found.level)}, from`, ...setting, digits: 4 },
         { key: "upper", label: "to", ...setting, digits: 4 },
         { key: "meets", label: "Met by", kind: "text" },
-        { key: "achieved", label: found.measure, kind: "number", digits: 5 },
+        { key: "achieved", label: found.measure, kind: "number", digits: 5, unit: found.measureUnit },
         { key: "achievedError", label: "Monte-Carlo error", kind: "number", digits: 1 },
       ],
-      rows: found.solutions.map((solution) => ({
+      rows: [...found.solutions, ...sidesOf(found)].map((solution) => ({
         ...solution,
         lower: solution.margin === undefined ? without : (solution.margin.lower ?? "none"),
         upper: solution.margin === undefined ? without : (solution.margin.upper ?? "none"),
@@ -144,6 +150,20 @@ export function showSolved(found: Solved): readonly Table[] {
       notes: [found.sentence],
     }),
   ];
+}
+
+/** The two sides of every jump over the target, as rows beside the solutions. */
+function sidesOf(
+  found: Solved,
+): readonly Pick<Solved["solutions"][number], "value" | "achieved" | "achievedError" | "margin">[] {
+  return found.jumps.flatMap(({ below, above }) =>
+    [below, above].map((side) => ({
+      ...side,
+      achievedError: 0,
+      margin: undefined,
+      meets: "neither side: the measure jumps",
+    })),
+  );
 }
 
 /** The answer to "which reading": gain against time, and the best few. */
@@ -167,6 +187,9 @@ export function showNextReading(found: NextReading): readonly (Figure | Table)[]
           upper: found.choices.map((choice) => choice.gain + 2 * choice.error),
         },
         { mark: "vertical", name: "best", x: found.recommended.time },
+        ...(found.event === undefined || !Number.isFinite(found.event)
+          ? []
+          : [{ mark: "vertical", name: "the event", x: found.event, style: 5 } as const]),
       ],
       notes: [found.sentence],
     }),
@@ -179,11 +202,16 @@ export function showNextReading(found: NextReading): readonly (Figure | Table)[]
           : { key: "gain", label: gain, kind: "number", digits: 3 },
         { key: "error", label: "Monte-Carlo error", kind: "number", digits: 1 },
         { key: "cost", label: "Cost", kind: "number", digits: 3 },
+        { key: "remark", label: "Remark", kind: "text" },
       ],
       rows: [...found.choices]
         .sort((a, b) => b.worth - a.worth)
         .slice(0, 5)
-        .map((choice) => ({ ...choice, time: periodCell(found.axis, found.zero, choice.time) })),
+        .map((choice) => ({
+          ...choice,
+          time: periodCell(found.axis, found.zero, choice.time),
+          remark: remarkOf(choice),
+        })),
       notes: [found.sentence],
     }),
   ];

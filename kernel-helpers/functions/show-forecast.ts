@@ -13,9 +13,20 @@ export function showForecast(ahead: Forecast): readonly (Figure | Table)[] {
 }
 
 function fanCharts(ahead: Forecast): Figure[] {
-  return ahead.fit.rule.states.map((state) =>
-    fanFigure({ ...fanOf(ahead, state), title: `Forecast of ${ruleLabel(ahead.fit.rule)}` }),
-  );
+  const { fit } = ahead;
+  const title = `Forecast of ${ruleLabel(fit.rule)}`;
+  return fit.rule.states.flatMap((state) => {
+    const factor = ahead.groups[0]!.states.find((each) => each.state === state)?.observed?.factor;
+    if (factor === undefined) return [fanFigure({ ...fanOf(ahead, state), title })];
+    const index = columnOf(ahead, state);
+    return [
+      fanFigure({ ...fanOf(ahead, state), title: `${title}: ${state}` }),
+      fanFigure({
+        ...indexFanOf(ahead, state),
+        title: `Forecast of ${index}, which reads ${factor} times ${state}`,
+      }),
+    ];
+  });
 }
 
 /** The fan of a state with the level that decides, and what the sentence says of it. */
@@ -33,18 +44,51 @@ export function decidingFan(
   });
 }
 
+function columnOf(ahead: Forecast, state: string): string {
+  return ahead.fit.observations.states.find((each) => each.name === state)!.column;
+}
+
+/** A state in its own unit; with its record, unless that reads it through a factor. */
 function fanOf(ahead: Forecast, state: string): Omit<FanFigureOptions, "title"> {
-  const { observations } = ahead.fit;
   return {
-    x: acrossRecord(observations),
-    y: { title: state, unit: observations.states.find((each) => each.name === state)?.unit ?? "" },
-    series: ahead.groups.map((group) => projected(ahead, group, state)),
+    x: acrossRecord(ahead.fit.observations),
+    y: { title: state, unit: ahead.groups[0]!.states.find((each) => each.state === state)!.unit },
+    series: ahead.groups.map((group) => {
+      const { central, bands, observed } = group.states.find((each) => each.state === state)!;
+      const kind = observed === undefined ? "future observation" : "mean path";
+      const shown = bands.filter((band) => band.kind === kind);
+      return series(ahead, group, state, { central, bands: shown, recorded: observed === undefined });
+    }),
     notes: notesOf(ahead),
   };
 }
 
-function projected(ahead: Forecast, group: GroupForecast, name: string): ProjectedSeries {
-  const state = group.states.find((each) => each.state === name)!;
+/** What the record reads of a state through a factor: the record, and observations to come. */
+function indexFanOf(ahead: Forecast, state: string): Omit<FanFigureOptions, "title"> {
+  return {
+    x: acrossRecord(ahead.fit.observations),
+    y: {
+      title: columnOf(ahead, state),
+      unit: ahead.groups[0]!.states.find((each) => each.state === state)!.observed!.unit,
+    },
+    series: ahead.groups.map((group) => {
+      const { central, bands } = group.states.find((each) => each.state === state)!.observed!;
+      return series(ahead, group, state, { central, bands, recorded: true });
+    }),
+    notes: notesOf(ahead),
+  };
+}
+
+function series(
+  ahead: Forecast,
+  group: GroupForecast,
+  name: string,
+  shown: {
+    readonly central: readonly number[];
+    readonly bands: GroupForecast["states"][number]["bands"];
+    readonly recorded: boolean;
+  },
+): ProjectedSeries {
   const recorded = ahead.fit.observations.groups.find((each) => each.name === group.group)!;
   const x = group.time;
   const end = group.index.indexOf(group.recordEnd);
@@ -52,11 +96,11 @@ function projected(ahead: Forecast, group: GroupForecast, name: string): Project
   return {
     name: groupName(group),
     x: acrossGroup(recorded),
-    recorded: { name: "recorded", x: recorded.time, y: recorded.values[name]! },
-    central: { name: "fitted path", x, y: state.central },
-    bands: state.bands
-      .filter((band) => band.kind === "future observation")
-      .map(({ level, kind, lower, upper }) => ({ level, of: kind, x, lower, upper })),
+    recorded: shown.recorded
+      ? { name: "recorded", x: recorded.time, y: recorded.values[name]! }
+      : { name: "recorded", x: [], y: [] },
+    central: { name: "fitted path", x, y: shown.central },
+    bands: shown.bands.map(({ level, kind, lower, upper }) => ({ level, of: kind, x, lower, upper })),
     recordEnd: x[end]!,
     ...(horizon !== undefined && x[end + horizon] !== undefined && { horizon: x[end + horizon]! }),
   };
@@ -71,8 +115,11 @@ function aheadTable(ahead: Forecast): Table {
   const each = periodsShown(ahead.options.periods, ahead.groups.length * ahead.fit.rule.states.length);
   const rows = ahead.groups.flatMap((group) => rowsAhead(group, level, each));
   const { axis } = ahead.fit.observations;
-  const unit = ahead.groups[0]?.states[0]?.unit ?? "";
-  const number = { kind: "number", digits: 4, unit } as const;
+  const number = { kind: "number", digits: 4, unit: commonUnit(ahead, (state) => state.unit) } as const;
+  const future = { ...number, unit: commonUnit(ahead, (state) => state.observed?.unit ?? state.unit) };
+  const scaled = ahead.groups[0]?.states.find((state) => state.observed !== undefined);
+  const observed =
+    scaled === undefined ? "Future observation" : `Future observation of ${columnOf(ahead, scaled.state)}`;
   const percent = `${Number((100 * level).toPrecision(12))}%`;
   return table({
     title: "Periods ahead",
@@ -83,8 +130,8 @@ function aheadTable(ahead: Forecast): Table {
       { key: "central", label: "Fitted path", ...number },
       { key: "meanLower", label: `Mean path ${percent}, from`, ...number },
       { key: "meanUpper", label: "to", ...number },
-      { key: "futureLower", label: `Future observation ${percent}, from`, ...number },
-      { key: "futureUpper", label: "to", ...number },
+      { key: "futureLower", label: `${observed} ${percent}, from`, ...future },
+      { key: "futureUpper", label: "to", ...future },
     ],
     rows,
     limit: rows.length,
@@ -95,6 +142,12 @@ function aheadTable(ahead: Forecast): Table {
       ...notesOf(ahead),
     ],
   });
+}
+
+/** The unit that all states share; "" where they differ. */
+function commonUnit(ahead: Forecast, unitOf: (state: GroupForecast["states"][number]) => string): string {
+  const units = new Set(ahead.groups.flatMap((group) => group.states.map(unitOf)));
+  return units.size === 1 ? [...units][0]! : "";
 }
 
 /** Rows shown of all groups together where a forecast is long, and the most where all of a short one is shown. */
@@ -115,7 +168,8 @@ function rowsAhead(group: GroupForecast, level: number, each: number): Readonly<
     Array.from({ length: count }, (_, k) => present + Math.round(((k + 1) * ahead) / count)),
   );
   return group.states.flatMap((state) => {
-    const band = (kind: string) => state.bands.find((each) => each.kind === kind && each.level === level)!;
+    const bands = [...state.bands, ...(state.observed?.bands ?? [])];
+    const band = (kind: string) => bands.find((each) => each.kind === kind && each.level === level)!;
     const mean = band("mean path");
     const future = band("future observation");
     return group.index.flatMap((_, t) =>

@@ -20,6 +20,7 @@ import {
   valuesByName,
 } from "./common-options.js";
 import type { FunctionSchema } from "./function-schema.js";
+import { crossed, oneLevel } from "./level-schemas.js";
 import { measure, target } from "./measure-schemas.js";
 import {
   either,
@@ -53,8 +54,14 @@ const shared: Schema<Shared> = {
   ),
   parameters: only("rule", optional(valuesByName("parameter"), "Of a rule: its parameters by name")),
   initial: only("rule", optional(firstValues, "Of a rule: its first values by state")),
-  noise: only("rule", optional(noise, "Of a rule: random change by state, for probabilities")),
-  paths: optional(whole(1, 2000), "Random paths for probabilities and margins", 2000),
+  noise: only(
+    "rule",
+    optional(
+      noise,
+      "Of a rule: random change by state; every measure is then one of the paths' distribution",
+    ),
+  ),
+  paths: optional(whole(1, 4000), "Paths where chance has a part", 4000),
   seed,
   onProgress,
   signal,
@@ -78,7 +85,7 @@ const solveOptions: Schema<SolveOptions> = {
   ),
   multiple: optional(
     positive,
-    "The value comes in multiples of this (0.01 for money, 1 for pieces), rounded to the side that meets the target",
+    "The setting comes in multiples of this (0.01 for money, 1 for pieces); with `atMost` and `atLeast` only multiples are tried, and the first that meets the target is given, with `is` the nearest multiple",
   ),
   level: intervalLevel,
 };
@@ -95,6 +102,7 @@ const optimizeOptions: Schema<OptimizeOptions> = {
   ...shared,
   vary,
   range: required(pair, "Lowest and highest value looked at"),
+  multiple: optional(positive, "The setting comes in multiples of this (1 for pieces); only they are tried"),
   maximize: optional(measure, "Measure that is to be as large as can be; give this or `minimize`"),
   minimize: optional(measure, "Measure that is to be as small as can be; give this or `maximize`"),
   level: intervalLevel,
@@ -161,9 +169,8 @@ const tradeoffSchema: FunctionSchema = {
 };
 
 const timeToReachOptions: Schema<TimeToReachOptions> = {
-  state: optional(nameOf("state", "N"), "Name of the state", "the only one"),
-  risesTo: optional(anyNumber, "Level that the state rises to, from below, in its unit"),
-  fallsTo: optional(anyNumber, "Level that the state falls to, from above, in its unit"),
+  state: optional(nameOf("measured", "N"), "A state or quantity", "the first state"),
+  ...crossed,
   level: intervalLevel,
   newUnit: optional(
     flag,
@@ -175,7 +182,7 @@ const timeToReachOptions: Schema<TimeToReachOptions> = {
 const timeToReachSchema: FunctionSchema = {
   name: "timeToReach",
   takes: [{ name: "ahead", takes: ["forecast", "simulation"] }],
-  options: { fields: timeToReachOptions, oneOf: [["risesTo", "fallsTo"]] },
+  options: { fields: timeToReachOptions, oneOf: oneLevel },
   example: "timeToReach(forecast(fit, { periods: 24 }), { risesTo: 120 })",
 };
 
@@ -196,7 +203,7 @@ const nextReadingOptions: Schema<NextReadingOptions> = {
       ),
     ),
     "Periods at which it could be taken, by number or label: a list, or two ends",
-    "every period from the first on",
+    "every period after the record, whose own periods are looked at only where they are given here, as for samples that were kept",
   ),
   answer: optional(measure, "Measure whose margin is to be narrowed; needed for a single fit"),
   state: optional(nameOf("state", "N"), "What is read", "the first state"),

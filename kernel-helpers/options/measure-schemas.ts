@@ -1,5 +1,6 @@
 import type { Measure, SolveOptions } from "../../src/decision/index.js";
-import { anyNumber } from "./common-options.js";
+import { anyNumber, share } from "./common-options.js";
+import { crossed, oneLevel } from "./level-schemas.js";
 import {
   either,
   type Fields,
@@ -23,27 +24,27 @@ const window: Fields = {
   to: optional(whole(1, 12), "Last period of the window, counted from the present", "the last one"),
 };
 
-const crossed: Fields = {
-  risesTo: optional(anyNumber, "Level that the state rises to, from below, in its unit"),
-  fallsTo: optional(anyNumber, "Level that the state falls to, from above, in its unit"),
-};
-
-const oneLevel = [["risesTo", "fallsTo"]];
+const quantile = optional(
+  share,
+  "Which quantile of the paths is taken instead of their mean (of a time: instead of the median)",
+  "none",
+);
 
 /** By the field that names it: what else a measure has. */
-const kinds: Readonly<Record<Exclude<MeasureKind, "at" | "from" | "to" | "risesTo" | "fallsTo">, Shape>> = {
+const kinds: Readonly<
+  Record<Exclude<MeasureKind, "at" | "from" | "to" | "risesTo" | "fallsTo" | "quantile">, Shape>
+> = {
   level: {
-    fields: { level: name, at: required(number({ from: 0, whole: true }, 12), "Periods ahead") },
+    fields: { level: name, at: required(number({ from: 0, whole: true }, 12), "Periods ahead"), quantile },
   },
-  average: { fields: { average: name, ...window } },
-  total: { fields: { total: name, ...window } },
-  lowest: { fields: { lowest: name, ...window } },
-  highest: { fields: { highest: name, ...window } },
-  time: { fields: { time: name, ...crossed }, oneOf: oneLevel },
-  probability: { fields: { probability: name, ...crossed }, oneOf: oneLevel },
-  parameter: {
-    fields: { parameter: required(nameOf("parameter", "r"), "Parameter of the rule") },
-  },
+  average: { fields: { average: name, ...window, quantile } },
+  total: { fields: { total: name, ...window, quantile } },
+  lowest: { fields: { lowest: name, ...window, quantile } },
+  highest: { fields: { highest: name, ...window, quantile } },
+  share: { fields: { share: name, ...crossed, ...window, quantile }, oneOf: oneLevel },
+  time: { fields: { time: name, ...crossed, quantile }, oneOf: oneLevel },
+  probability: { fields: { probability: name, ...crossed, ...window }, oneOf: oneLevel },
+  parameter: { fields: { parameter: required(nameOf("parameter", "r"), "Parameter of the rule") } },
 };
 
 export const measure: Value<Measure> = {

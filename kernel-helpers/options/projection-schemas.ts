@@ -7,18 +7,9 @@ import type {
 } from "../../src/projection/index.js";
 import type { ProcessNoise } from "../../src/rule/index.js";
 import { projectedPaths, projectedPeriods } from "./call-sizes.js";
-import {
-  anyNumber,
-  firstValues,
-  fit,
-  onProgress,
-  rule,
-  seed,
-  share,
-  signal,
-  valuesByName,
-} from "./common-options.js";
+import { firstValues, fit, onProgress, rule, seed, share, signal, valuesByName } from "./common-options.js";
 import type { FunctionSchema } from "./function-schema.js";
+import { crossed, oneLevel } from "./level-schemas.js";
 import {
   either,
   type Fields,
@@ -91,9 +82,8 @@ export const noise: Value<Readonly<Record<string, Noise | ProcessNoise>>> = name
 );
 
 const watched: Schema<Watch> = {
-  state: optional(nameOf("state", "N"), "Name of the state", "the only one"),
-  risesTo: optional(anyNumber, "Level that the state rises to, from below, in its unit"),
-  fallsTo: optional(anyNumber, "Level that the state falls to, from above, in its unit"),
+  state: optional(nameOf("measured", "N"), "A state or quantity", "the first state"),
+  ...crossed,
 };
 
 const levels = optional(
@@ -102,7 +92,7 @@ const levels = optional(
   "[0.5, 0.8, 0.95]",
 );
 const watch = optional(
-  listOf(shapeOf(watched, '{ state: "N", fallsTo: 0 }')),
+  listOf(shapeOf(watched, '{ state: "N", fallsTo: 0 }', oneLevel)),
   "Levels whose first passage is followed, for runs with more paths than can be kept",
 );
 const scenarioOption = optional(
@@ -162,7 +152,7 @@ const simulateOptions: Schema<SimulateOptions> = {
   noise: optional(noise, "By state: the random change of each period", "what the rule says"),
   observationNoise: optional(
     named(error, noiseExample, "state"),
-    "By state: the observation error, which is reported and not carried on",
+    "By state: the error of an observation, reported and not carried on",
   ),
   paths: optional(whole(1, 4000), "Random paths", "4000, or 1 where nothing is random"),
   levels,

@@ -1,5 +1,5 @@
 import type { RecurrenceOptions, RuleCatalogue } from "../../src/rule/index.js";
-import { firstValue, limitsByName, valuesByName } from "./common-options.js";
+import { firstValue, limits, valuesByName } from "./common-options.js";
 import type { FunctionSchema } from "./function-schema.js";
 import {
   either,
@@ -11,6 +11,7 @@ import {
   pairOf,
   required,
   type Schema,
+  shapeOf,
   text,
   whole,
 } from "./option.js";
@@ -33,6 +34,16 @@ type WithOwn =
 
 const names = listOf(text("C"), '["C"]', 0);
 
+type StateBounds = Exclude<NonNullable<RecurrenceOptions["bounds"]>[string], readonly [number, number]>;
+
+const stateBounds: Schema<StateBounds> = {
+  range: required(limits, "Lower and upper bound, infinite where open"),
+  atBounds: required(
+    oneOf("absorbed", "error"),
+    "Whether a path stays at the bound, or ends there as an error",
+  ),
+};
+
 const namedRuleOptions: Schema<NamedRuleOptions> = {
   name: optional(
     text("crowding"),
@@ -45,10 +56,14 @@ const namedRuleOptions: Schema<NamedRuleOptions> = {
   ),
   units: optional(named(text("EUR"), '{ owed: "EUR" }'), "Unit by name"),
   bounds: optional(
-    limitsByName(),
-    "Lowest and highest admitted value by state or parameter; infinite where open",
+    named(
+      either(limits, shapeOf(stateBounds, '{ range: [0, 500], atBounds: "error" }')),
+      "{ K: [0, Infinity] }",
+    ),
+    'Lower and upper bound by state or parameter, as in `{ K: [0, Infinity] }`; for a state also what happens there: `{ N: { range: [0, 500], atBounds: "error" } }`',
+    "a state is absorbed at a lower bound of 0 (it stays 0), and any other bound is an error of the rule, at which a path ends",
   ),
-  start: optional(valuesByName(), "Where a fit starts, by parameter"),
+  start: optional(valuesByName(), "Starting value of a fit, by parameter"),
   fixed: optional(valuesByName(), "Parameters held at a value in every fit, by name"),
   initial: optional(
     named(either(firstValue, oneOf("estimated")), "{ N: 10 }"),

@@ -5,9 +5,8 @@ import {
   problemOf,
 } from "../../src/estimate/index.js";
 import type { ModelError } from "../../src/numeric/index.js";
-import { attach } from "./attach.js";
+import { attach, attachGroups } from "./attach.js";
 import { noIntervalError, unknownValueError } from "./errors.js";
-import { groupNamed, onlyGroup } from "./group-named.js";
 import { namedValues } from "./named-values.js";
 import { type Observations, withLast } from "./record-shortcuts.js";
 
@@ -41,22 +40,14 @@ export interface Fit extends EngineFit, EstimatedValues {
 /** Gives a fit and each of its groups the shortcuts to what was estimated. */
 export function withEstimates(fit: EngineFit): Fit {
   withLast(fit.observations);
-  for (const group of fit.groups) attach<EngineGroupFit, EstimatedValues>(group, ofGroup(fit, group));
+  for (const group of fit.groups) attach(group, ofGroup(fit, group));
   const groups = fit.groups as readonly GroupFit[];
-  const shared = problemOf(fit).groups === "combined" ? fit.population : undefined;
-  const own = <Member extends "values" | "interval" | "sigma">(member: Member): GroupFit[Member] =>
-    onlyGroup("fit", member, groups)[member];
-  return attach(fit, {
-    ...(shared !== undefined && groups.length > 1
-      ? { ...ofAllGroups(fit, shared), sigma: () => groups[0]!.sigma }
-      : { values: () => own("values"), interval: () => own("interval"), sigma: () => own("sigma") }),
-    group: () => (name: string) => groupNamed("fit", groups, name),
-  }) as Fit;
+  if (problemOf(fit).groups === "combined") attach(fit, ofAllGroups(fit));
+  attachGroups(fit, "fit", groups, ["values", "interval", "sigma"]);
+  return fit as Fit;
 }
 
-type Makers = { readonly [Name in keyof EstimatedValues]: () => EstimatedValues[Name] };
-
-function ofGroup(fit: EngineFit, group: EngineGroupFit): Makers {
+function ofGroup(fit: EngineFit, group: EngineGroupFit): EstimatedValues {
   const { rule } = fit;
   const reach = Math.max(0, ...rule.lags.map(({ lag }) => lag));
   const given = problemOf(fit).errors === "observation" ? rule.states : [];
@@ -64,25 +55,25 @@ function ofGroup(fit: EngineFit, group: EngineGroupFit): Makers {
     ...group.parameters,
     ...Object.fromEntries(given.map((state) => [`${state}[${reach}]`, group.initial[state]!])),
   };
-  return makers(held, group.estimates, "");
+  return byName(held, group.estimates, "");
 }
 
-/** Parameters that hold for all groups of a combined fit; each group's first values are its own. */
-function ofAllGroups({ groups }: EngineFit, shared: readonly Estimate[]): Makers {
-  const [first] = groups;
-  return makers(first!.parameters, shared, ` Values of one group: \`.group("${first!.group}").values\`.`);
+/** What holds for all groups of a combined fit; each group's first values are its own. */
+function ofAllGroups({ groups, population = [] }: EngineFit): Pick<Fit, "values" | "interval" | "sigma"> {
+  const { group, parameters, sigma } = groups[0]!;
+  return { ...byName(parameters, population, ` Values of one group: \`.group("${group}").values\`.`), sigma };
 }
 
-function makers(
+function byName(
   held: Readonly<Record<string, number>>,
   estimates: readonly Estimate[],
   more: string,
-): Makers {
+): EstimatedValues {
   const all = { ...held, ...Object.fromEntries(estimates.map(({ name, value }) => [name, value])) };
   const missing = (name: string): ModelError => unknownValueError("fit", name, Object.keys(all), more);
   return {
-    values: () => namedValues(all, missing),
-    interval: () => (name) => {
+    values: namedValues(all, missing),
+    interval: (name) => {
       const estimate = estimates.find((each) => each.name === name);
       if (estimate !== undefined) return limitsOf(estimate);
       throw name in all ? noIntervalError(name, all[name]!) : missing(name);

@@ -1,7 +1,7 @@
-import { ambiguousGroupError, severalGroupsError, unknownGroupError } from "./errors.js";
+import { ambiguousGroupError, unknownGroupError } from "./errors.js";
 
 /** A group of a result, or a scenario of one. */
-interface Part {
+export interface Part {
   readonly group: string;
   readonly scenario?: string;
 }
@@ -9,14 +9,6 @@ interface Part {
 /** How a group and its scenario are named together: "flask A, rate 5%". */
 export function groupName({ group, scenario = "" }: Part): string {
   return [group, scenario].filter((part) => part !== "").join(", ");
-}
-
-/** The only group of a result; `member` is what was asked of it. */
-export function onlyGroup<Group extends Part>(what: string, member: string, groups: readonly Group[]): Group {
-  const [only] = groups;
-  if (only !== undefined && groups.length === 1) return only;
-  const names = groups.map(groupName);
-  throw severalGroupsError(what, member, names, `group("${names[0]}").${member}`);
 }
 
 /** The group of a name: that of the group, of the scenario, or both as "flask A, rate 5%". */

@@ -1,5 +1,5 @@
 export { type EstimatedValues, type Fit, type GroupFit, withEstimates } from "./fit-shortcuts.js";
-export { groupName, groupNamed, onlyGroup } from "./group-named.js";
+export { groupName, groupNamed } from "./group-named.js";
 export type { ChangePoint, Check, CompareOptions, Proposal, UpdatedFit } from "./holding-fits.js";
 export {
   type Forecast,

@@ -3,10 +3,9 @@ import type {
   Simulation as EngineSimulation,
   GroupForecast,
 } from "../../src/projection/index.js";
-import { attach } from "./attach.js";
+import { attach, attachGroups } from "./attach.js";
 import { unknownValueError } from "./errors.js";
 import type { Fit } from "./fit-shortcuts.js";
-import { groupNamed, onlyGroup } from "./group-named.js";
 import { namedValues } from "./named-values.js";
 
 /** What was projected, by state; left out of listings and copies of the projection. */
@@ -49,24 +48,14 @@ export function simulationWithValues(run: EngineSimulation): Simulation {
 }
 
 function withPaths(ahead: EngineForecast | EngineSimulation): object {
-  const what = ahead.kind;
-  for (const group of ahead.groups) attach<GroupForecast, ProjectedValues>(group, pathsOf(what, group));
-  const groups = ahead.groups as readonly ProjectedGroup[];
-  return attach(ahead, {
-    values: () => onlyGroup(what, "values", groups).values,
-    last: () => onlyGroup(what, "last(...)", groups).last,
-    group: () => (name: string) => groupNamed(what, groups, name),
-  });
+  const { kind } = ahead;
+  for (const group of ahead.groups) attach(group, pathsOf(kind, group));
+  attachGroups(ahead, kind, ahead.groups as readonly ProjectedGroup[], ["values", "last"]);
+  return ahead;
 }
 
-function pathsOf(
-  what: string,
-  { states }: GroupForecast,
-): { readonly [Name in keyof ProjectedValues]: () => ProjectedValues[Name] } {
+function pathsOf(what: string, { states }: GroupForecast): ProjectedValues {
   const paths = Object.fromEntries(states.map(({ state, central }) => [state, central]));
   const values = namedValues(paths, (name) => unknownValueError(what, name, Object.keys(paths)));
-  return {
-    values: () => values,
-    last: () => (state) => values[state]!.at(-1) ?? Number.NaN,
-  };
+  return { values, last: (state) => values[state]!.at(-1) ?? Number.NaN };
 }

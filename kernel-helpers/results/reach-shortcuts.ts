@@ -1,6 +1,5 @@
 import type { TimeToReach as EngineTimeToReach, GroupReach } from "../../src/decision/index.js";
-import { attach } from "./attach.js";
-import { groupNamed, onlyGroup } from "./group-named.js";
+import { attachGroups } from "./attach.js";
 
 /** What is asked most of a single group; left out of listings and copies of the result. */
 type SingleReach = Pick<GroupReach, (typeof members)[number]>;
@@ -16,12 +15,6 @@ const members = ["time", "firstPeriod", "lower", "upper", "median", "never", "wo
 
 /** Gives an answer the shortcuts to the times of its only group. */
 export function withSingleReach(found: EngineTimeToReach): TimeToReach {
-  const { groups } = found;
-  const single = members.map(
-    (member) => [member, () => onlyGroup("answer", member, groups)[member]] as const,
-  );
-  return attach(found, {
-    ...Object.fromEntries(single),
-    group: () => (name: string) => groupNamed("answer", groups, name),
-  }) as TimeToReach;
+  attachGroups(found, "answer", found.groups, members);
+  return found as TimeToReach;
 }

@@ -13,7 +13,7 @@ export interface Observations extends EngineObservations {
 
 /** Gives a record the shortcut to its last values. */
 export function withLast(record: EngineObservations): Observations {
-  return attach(record, { last: () => (state: string, group?: string) => lastOf(record, state, group) });
+  return attach(record, { last: (state: string, group?: string) => lastOf(record, state, group) });
 }
 
 function lastOf({ groups }: EngineObservations, state: string, wanted: string | undefined): number {

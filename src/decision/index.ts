@@ -5,13 +5,14 @@ export {
   type SensitivityRow,
   sensitivity,
 } from "./choice/sensitivity.js";
-export type { DatedTarget, Solution, Solved, SolveOptions, Target } from "./choice/solution.js";
+export type { DatedTarget, Jump, Solution, Solved, SolveOptions, Target } from "./choice/solution.js";
 export { solveFor } from "./choice/solve-for.js";
-export { type Tradeoff, type TradeoffOptions, tradeoff } from "./choice/tradeoff.js";
+export { type Tradeoff, type TradeoffOptions, type TradeoffRow, tradeoff } from "./choice/tradeoff.js";
 export type { Measure } from "./measure/measure.js";
 export type { AcrossUnits } from "./reach/across-units.js";
 export type { DeltaMargin } from "./reach/delta-margin.js";
 export type { GroupReach, TimeToReach, TimeToReachOptions } from "./reach/reach.js";
+export { target as reachedLevel } from "./reach/reach-sentence.js";
 export { timeToReach } from "./reach/time-to-reach.js";
 export {
   type NextReading,
@@ -19,4 +20,3 @@ export {
   nextReading,
   type ReadingChoice,
 } from "./reading/next-reading.js";
-export { amount } from "./words/amount.js";

@@ -43,12 +43,14 @@ export type { Stability } from "./rest/stability.js";
 export type { HeldSetting } from "./setting/held-step.js";
 export type { SearchRange } from "./setting/search-range.js";
 export { type InitialValues, initialVector, parametersBySlot } from "./setting/setting.js";
+export { type BoundedPath, type BoundReached, boundedPath, type PathRun } from "./trajectory/bounded-path.js";
 export {
   type GuaranteedDigits,
   type GuaranteedOptions,
   guaranteedDigits,
 } from "./trajectory/guaranteed-digits.js";
 export {
+  type Absorption,
   type Trajectory,
   type TrajectoryOptions,
   type TrajectoryStop,

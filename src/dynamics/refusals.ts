@@ -28,6 +28,14 @@ export function notFinite(role: string, name: string, value: unknown): ModelErro
   );
 }
 
+export function beyondBounds(state: string, value: number, low: number, high: number): ModelError {
+  return new ModelError(
+    "beyond-bounds",
+    `The initial value of "${state}" is ${value}, and the rule bounds ${state} to ${low} to ${high}. Give an \`initial\` within them, or the rule other \`bounds\`.`,
+    { state, value, low, high },
+  );
+}
+
 export function wrongHistory(state: string, wanted: number, given: number): ModelError {
   return new ModelError(
     "wrong-history",

@@ -1,4 +1,4 @@
-/** What is frozen to its last part, so that a result inside another one is walked once. */
+/** Results that are frozen to their last part, so that one inside another is not walked again. */
 const frozen = new WeakSet<object>();
 
 /**
@@ -12,6 +12,8 @@ function isPlain(value: unknown): value is object {
   return prototype === null || Object.getPrototypeOf(prototype) === null;
 }
 
+const partsOf = (value: object): readonly unknown[] => (Array.isArray(value) ? value : Object.values(value));
+
 /**
  * Freezes a result with all lists and records in it. Typed arrays cannot be frozen and stay writable; what was
  * frozen by this function before is not walked again, so a result that holds another one costs its own parts only.
@@ -20,14 +22,17 @@ function isPlain(value: unknown): value is object {
  * @example Object.isFrozen(freezeDeep({ groups: [{ name: "A" }] }).groups[0]); // true
  */
 export function freezeDeep<T>(value: T): T {
+  // Frozen already when met: by somebody else, or a moment ago because a part holds itself.
+  const met = new Set<object>();
   const waiting: unknown[] = [value];
   while (waiting.length > 0) {
     const next = waiting.pop();
-    if (!isPlain(next) || frozen.has(next)) continue;
-    frozen.add(Object.freeze(next));
-    for (const part of Array.isArray(next) ? next : Object.values(next))
-      if (typeof part === "object") waiting.push(part);
+    if (!isPlain(next) || frozen.has(next) || met.has(next)) continue;
+    if (Object.isFrozen(next)) met.add(next);
+    else Object.freeze(next);
+    for (const part of partsOf(next)) if (typeof part === "object") waiting.push(part);
   }
+  if (isPlain(value)) frozen.add(value);
   return value;
 }
 

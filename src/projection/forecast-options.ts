@@ -1,6 +1,6 @@
 import type { InputPlans } from "../dynamics/index.js";
 import type { RunHooks } from "../numeric/index.js";
-import type { Watch } from "./ensemble/passage.js";
+import type { Watch } from "./ensemble/placed-watches.js";
 import type { Scenarios } from "./inputs/scenarios.js";
 
 /** Options of `forecast`. */

@@ -1,6 +1,8 @@
 import type { GroupFit } from "../estimate/index.js";
 import type { Warning } from "../numeric/index.js";
+import type { StateBound } from "../rule/index.js";
 import type { CentralPath } from "./central-path.js";
+import type { BoundsPassed } from "./first-passage.js";
 import type { FitGround } from "./fit-ground.js";
 import type { DrawnStarts } from "./parameters/drawn-starts.js";
 import type { Predictability } from "./predictability.js";
@@ -14,6 +16,10 @@ export interface WarningSource {
   readonly starts: DrawnStarts;
   readonly central: CentralPath;
   readonly left: number;
+  /** By state. */
+  readonly bounds: readonly StateBound[];
+  /** By state: where paths passed a bound. */
+  readonly passed: readonly BoundsPassed[];
   readonly predictability: Predictability | undefined;
   /** "" for the only one. */
   readonly scenario: string;
@@ -28,12 +34,12 @@ const worthTelling = 0.05;
 
 /** What a reader of a forecast must know. */
 export function forecastWarnings(source: WarningSource): Warning[] {
-  const { central, left, starts } = source;
+  const { starts, ground } = source;
   return [
     ...startedEarlier(source),
     ...openParameters(source),
     ...discardedDraws(starts),
-    ...rangeWarnings(central, source.period, left, starts.paths),
+    ...rangeWarnings({ ...source, rule: ground.rule, paths: starts.paths }),
     ...recordedSignWarnings(source),
     ...beyondRecord(source),
     ...partingPaths(source.predictability),
@@ -68,7 +74,7 @@ function discardedDraws({ discarded, paths }: DrawnStarts): Warning[] {
   return [
     {
       code: "draws-discarded",
-      message: `${discarded} draws were discarded because a parameter left its bounds, for ${paths} kept: near a bound the bands are cut.`,
+      message: `${discarded} draws were discarded because a parameter left its bounds or the path through the record its range, for ${paths} kept: near a bound the bands are cut.`,
     },
   ];
 }

@@ -3,7 +3,7 @@ import type { Warning } from "../numeric/index.js";
 import type { PeriodAxis } from "../record/index.js";
 import type { Band } from "./ensemble/band.js";
 import type { Growth } from "./ensemble/growth.js";
-import type { Passage } from "./ensemble/passage.js";
+import type { WatchedPassage } from "./ensemble/placed-watches.js";
 import type { PathDraws } from "./path-draws.js";
 import type { Predictability } from "./predictability.js";
 
@@ -15,9 +15,21 @@ export interface ProjectedState {
   readonly central: readonly number[];
   /** The middle of the drawn paths that carry every error. */
   readonly median: readonly number[];
+  /** In the state's unit. */
   readonly bands: readonly Band[];
   /** Of a simulation under random change: how a typical path grows. */
   readonly growth?: Growth;
+  /** Where the record reads the state through a factor: what it would read, in the record's own unit. */
+  readonly observed?: ProjectedIndex;
+}
+
+/** A state as the record would read it, through a factor. */
+export interface ProjectedIndex {
+  readonly factor: string;
+  readonly unit: string;
+  /** The factor's estimate times the path at the estimates. */
+  readonly central: readonly number[];
+  readonly bands: readonly Band[];
 }
 
 /** One group of a record, or one scenario of inputs, carried forward. */
@@ -41,7 +53,7 @@ export interface GroupForecast {
   readonly states: readonly ProjectedState[];
   readonly ensemble: PathDraws;
   /** First passages of what was watched. */
-  readonly passages: readonly Passage[];
+  readonly passages: readonly WatchedPassage[];
   /** Share of paths that had left their range by the end, and its Monte-Carlo error. */
   readonly left: number;
   readonly leftError: number;

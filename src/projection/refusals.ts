@@ -118,10 +118,46 @@ export function refuseNoise(state: string, why: string): ModelError {
   });
 }
 
-export function refuseWatch(state: string, states: readonly string[]): ModelError {
+export function refuseProjectedName(name: string, known: readonly string[]): ModelError {
+  const [near] = nearestNames(name, known);
+  const hint = near === undefined ? "" : ` Did you mean "${near}"?`;
   return new ModelError(
-    "unknown-state",
-    `"${state}" cannot be watched: the rule's states are ${states.join(", ")}.`,
-    { state, states },
+    "unknown-name",
+    `The projection has no state or quantity "${name}". It has: ${known.join(", ")}.${hint}`,
+    { name, known },
+  );
+}
+
+export function refuseNoLevel(name: string): ModelError {
+  return new ModelError(
+    "level-missing",
+    `Which level of ${name}? Give one of \`risesTo\` and \`fallsTo\`, as in { risesTo: 120 } or { fallsTo: 0 }.`,
+    { name },
+  );
+}
+
+export function refuseLevelValue(name: string, value: unknown): ModelError {
+  return new ModelError(
+    "level-not-finite",
+    `The level of ${name} must be a finite number; ${String(value)} was given.`,
+    { name, value },
+  );
+}
+
+export function refuseLevelBeyond(name: string, level: number, low: number, high: number): ModelError {
+  return new ModelError(
+    "level-beyond-bounds",
+    `${name} cannot reach ${level}: the rule bounds it to ${low} to ${high}. Ask for a level within them, or give the rule other \`bounds\`.`,
+    { name, level, low, high },
+  );
+}
+
+export function refuseLevelName(name: string, known: readonly string[]): ModelError {
+  const [near] = nearestNames(name, known);
+  const hint = near === undefined ? "" : ` Did you mean "${near}"?`;
+  return new ModelError(
+    "unknown-name",
+    `A level is taken of a parameter or a first value, and there is no "${name}". There are: ${known.join(", ")}.${hint}`,
+    { name, known },
   );
 }

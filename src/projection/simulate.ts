@@ -12,19 +12,20 @@ import {
 import { type RunHooks, randomStream, reporter } from "../numeric/index.js";
 import { labelsAt, type PeriodAxis, periodWords } from "../record/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../rule/index.js";
-import { centralPath, type Ground, stateLimits } from "./central-path.js";
+import { centralPath, type Ground } from "./central-path.js";
 import { checkRun, keepLimit } from "./check-run.js";
 import { blockStreams } from "./ensemble/block-streams.js";
 import { runEnsemble } from "./ensemble/ensemble.js";
 import { gatherer } from "./ensemble/gather.js";
-import type { Watch } from "./ensemble/passage.js";
-import { passagesOf, placedWatches } from "./ensemble/placed-watches.js";
+import { passagesOf, placedWatches, type Watch } from "./ensemble/placed-watches.js";
 import { growthWarnings } from "./growth-warnings.js";
 import { type Scenario, type Scenarios, scenariosOf } from "./inputs/scenarios.js";
+import { levelSource, startNames } from "./levels.js";
 import { type Noise, noiseDraw } from "./noise/noise.js";
 import { ruleNoise } from "./noise/rule-noise.js";
 import type { GroupForecast } from "./projected-group.js";
 import { rangeWarnings } from "./range-warnings.js";
+import { observableRange, runBounds } from "./state-range.js";
 
 /** Options of `simulate`. */
 export interface SimulateOptions extends StartOptions, RunHooks {
@@ -40,7 +41,7 @@ export interface SimulateOptions extends StartOptions, RunHooks {
   readonly scenarios?: Scenarios;
   /** By state: the random change of each period; default what the rule says. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** By state: the observation error, which is reported and not carried on. */
+  /** By state: the error of an observation, reported and not carried on. */
   readonly observationNoise?: Readonly<Record<string, Noise>>;
   /** Random paths; default 4000, or 1 where nothing is random. */
   readonly paths?: number;
@@ -98,7 +99,8 @@ export function simulate(rule: Rule, options: SimulateOptions): Simulation {
   const settings = { periods, paths, seed, levels, period: axis.unit };
   const groups = scenariosOf(options).map(({ name, plans }) => {
     const inputs = inputsFrom(rule, start, periods, plans);
-    const ground = { rule, compiled, parameters, initial, inputs, from, periods };
+    const own = { startNames: startNames(rule), firstValues: {}, present: 0 };
+    const ground = { rule, compiled, parameters, initial, inputs, from, periods, ...own };
     return simulated(ground, start, { name, plans }, { ...options, ...settings }, change);
   });
   return {
@@ -124,12 +126,24 @@ function simulated(
   const { rule, compiled, periods } = ground;
   const { paths } = options;
   const central = centralPath(ground);
-  const watches = placedWatches(rule, options.watch);
-  const keep = paths * (periods + 1) * rule.states.length <= keepLimit;
+  const states = rule.states.length;
+  const quantities = rule.quantities.length;
+  const keep = paths * (periods + 1) * (states + quantities) <= keepLimit;
+  const starts = {
+    paths,
+    size: ground.parameters.length,
+    parameters: ground.parameters,
+    initial: ground.initial,
+  };
+  const levels = levelSource(ground, starts);
+  const watches = placedWatches(rule, options.watch, levels, 0);
+  const draws = change.map((noise) => noise && noiseDraw(noise));
+  const bounds = runBounds(rule, draws);
   const found = gatherer({
     kind: "simulated path",
     levels: options.levels,
-    states: rule.states.length,
+    states,
+    quantities,
     paths,
     periods,
     keep,
@@ -137,26 +151,27 @@ function simulated(
   });
   runEnsemble({
     compiled,
-    states: rule.states.length,
+    bounds,
+    observable: observableRange(rule),
     width: ground.initial.length,
     inputs: ground.inputs,
     from,
     periods,
-    starts: { paths, size: ground.parameters.length, parameters: ground.parameters, initial: ground.initial },
-    change: change.map((noise) => noise && noiseDraw(noise)),
+    starts,
+    change: draws,
     reading: rule.states.map((state) => {
       const noise = options.observationNoise?.[state];
       return noise && noiseDraw(noise);
     }),
-    limits: stateLimits(rule),
+    quantities: keep || watches.some(({ place }) => place >= states) ? quantities : 0,
     streams: blockStreams(randomStream(options.seed), paths),
     onRow: found.onRow,
     onProgress: reporter(options),
   });
-  const states = found.states();
+  const gathered = found.states();
   const index = Array.from({ length: periods + 1 }, (_, t) => from + t);
   const first = recorded?.time[0] ?? (axis.counts === "numbers" ? axis.origin : 0);
-  const left = found.ended[periods]! / paths;
+  const left = found.ended() / paths;
   return {
     group: "",
     scenario,
@@ -170,23 +185,35 @@ function simulated(
       state,
       unit: rule.units[state] ?? "",
       central: central.values[s]!,
-      median: states[s]!.median,
-      bands: states[s]!.bands,
-      ...(states[s]!.growth && { growth: states[s]!.growth }),
+      median: gathered[s]!.median,
+      bands: gathered[s]!.bands,
+      ...(gathered[s]!.growth && { growth: gathered[s]!.growth }),
     })),
     ensemble: {
       paths,
       periods,
       mean: [],
-      future: keep ? states.map((state) => state.paths!) : [],
+      future: keep ? gathered.map((state) => state.paths!) : [],
+      process: found.process,
+      passed: found.passed,
+      central: central.kept,
+      levels: { central: levels, paths: levels },
       discarded: 0,
     },
     passages: passagesOf(watches, found.passages),
     left,
     leftError: Math.sqrt((left * (1 - left)) / paths),
     warnings: [
-      ...rangeWarnings(central, (row) => periodWords(axis, from + row), left, paths),
-      ...growthWarnings(rule, found.states(), options.period),
+      ...rangeWarnings({
+        rule,
+        central,
+        period: (row) => periodWords(axis, from + row),
+        left,
+        paths,
+        bounds,
+        passed: found.passed,
+      }),
+      ...growthWarnings(rule, gathered, options.period),
     ],
   };
 }

@@ -8,10 +8,9 @@ import type { Decision } from "./decisions/decision.js";
 import { type FindingLog, findingLog } from "./finding-log.js";
 import type { ObservationOptions } from "./observation-options.js";
 import type { Observations, ObservedGroup } from "./observations.js";
-import { axisOfRows } from "./period/axis-of-rows.js";
+import { axisOfGroups } from "./period/axis-of-groups.js";
 import { noteMonthEnds } from "./period/note-month-ends.js";
 import { noteSteps } from "./period/note-steps.js";
-import type { PeriodAxis } from "./period/period-axis.js";
 import { type PlacedRows, placedRows } from "./period/placed-rows.js";
 import { type ReadColumns, readColumns } from "./read-columns.js";
 import { noDataRows, noUsableRows } from "./refusals.js";
@@ -139,7 +138,7 @@ function assemble(
     })),
     inputs: columns.inputs.map(({ name }) => name),
     ...(flows.length > 0 && { flows }),
-    axis: axisOfRecord(groups, periods),
+    axis: axisOfGroups(groups, periods),
     order: options.order ?? "",
     findings: log.all(),
     ...(decisions.length > 0 && { decisions }),
@@ -153,22 +152,4 @@ function assemble(
       refused: read - used,
     },
   };
-}
-
-/** The axis of all rows, whose period 0 is the earliest of them. */
-function axisOfRecord(groups: readonly ObservedGroup[], periods: PlacedRows): PeriodAxis {
-  if (groups.length === 1) return groups[0]!.axis;
-  const starts = groups.map(({ rows }) => periods.position[rows[0]! - 1]!);
-  const earliest = starts.reduce((a, b) => Math.min(a, b));
-  const first = groups[starts.indexOf(earliest)]!;
-  const ordered = [first, ...groups.filter((group) => group !== first)];
-  return axisOfRows(periods, {
-    rows: Int32Array.from(ordered.flatMap(({ rows }) => Array.from(rows, (row) => row - 1))),
-    index: Int32Array.from(
-      ordered.flatMap(({ index, rows }) => {
-        const before = Math.round(periods.position[rows[0]! - 1]! - earliest);
-        return Array.from(index, (i) => i + before);
-      }),
-    ),
-  });
 }

@@ -45,6 +45,20 @@ export interface CompiledRule {
   /** The same with parameters of its own for every path: parameters [paths, parameters]. */
   readonly advanceEach: Advance;
   /**
+   * The quantities inside the period that begins at t, for paths first..last-1. parameters [paths, parameters], or
+   * [parameters] with `stride` 0. out [quantities][paths].
+   */
+  readonly quantities: (
+    present: Float64Array,
+    first: number,
+    last: number,
+    parameters: Float64Array,
+    stride: number,
+    inputs: readonly Float64Array[],
+    t: number,
+    out: readonly Float64Array[],
+  ) => void;
+  /**
    * Gives the function that computes the sums of a least-squares fit of the whole path, or of its logarithms;
    * undefined where code is not generated or there are too many unknowns.
    */
@@ -53,11 +67,7 @@ export interface CompiledRule {
   readonly stepSums: ((logarithmic: boolean) => StepSums) | undefined;
 }
 
-/**
- * Moves paths first..last-1 one period on from t, in place. limits [states, 2]: a path of which a state falls
- * below the first, rises above the second, or is not finite, ends: it is NaN from there on. The limits
- * -Number.MAX_VALUE and Number.MAX_VALUE admit every finite value.
- */
+/** Moves paths first..last-1 one period on from t, in place. */
 export type Advance = (
   present: Float64Array,
   first: number,
@@ -65,7 +75,6 @@ export type Advance = (
   parameters: Float64Array,
   inputs: readonly Float64Array[],
   t: number,
-  limits: Float64Array,
 ) => void;
 
 /**

@@ -16,11 +16,12 @@ export { linearInParameters } from "./linear-in-parameters.js";
 export { type NonsmoothCall, type NonsmoothCalls, nonsmoothCalls } from "./nonsmooth-calls.js";
 export { quantitiesAt } from "./quantities-at.js";
 export { recurrence } from "./recurrence.js";
-export type { RecurrenceOptions } from "./recurrence-options.js";
+export type { Bounds, RecurrenceOptions } from "./recurrence-options.js";
 export type { ProcessNoise, Rule } from "./rule.js";
 export { ruleLabel, ruleLines } from "./rule-label.js";
 export { type RuleLanguage, ruleLanguage } from "./rule-language.js";
 export { ruleText } from "./rule-text.js";
+export { type AtBound, type StateBound, stateBounds, withinBound } from "./state-bounds.js";
 export {
   intervalAlgebra,
   isLinearInStates,

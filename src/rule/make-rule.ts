@@ -5,10 +5,22 @@ import { shortNames } from "./catalogue/short-names.js";
 import { checkOptions } from "./check/check-options.js";
 import type { Declarations } from "./check/checked-rule.js";
 import { laggedStates } from "./graph/build-graph.js";
-import type { RecurrenceOptions } from "./recurrence-options.js";
+import type { Bounds, RecurrenceOptions } from "./recurrence-options.js";
 import type { Rule } from "./rule.js";
 import { defineRule, storeDefinition } from "./rule-definition.js";
 import { unitFindings } from "./units/unit-findings.js";
+
+const hasMore = (bounds: Bounds): bounds is Extract<Bounds, { range: unknown }> => "range" in bounds;
+
+/** What each entry gives, under the same name; entries that give nothing are left out. */
+function mapped<T, U>(
+  given: Readonly<Record<string, T>>,
+  give: (each: T) => readonly U[],
+): Readonly<Record<string, U>> {
+  return Object.fromEntries(
+    Object.entries(given).flatMap(([name, each]) => give(each).map((value) => [name, value])),
+  );
+}
 
 /**
  * Reads and checks a rule; `named` is its catalogue entry.
@@ -24,7 +36,14 @@ export function makeRule(text: string, options: RecurrenceOptions, named?: Named
   const first = checked.statements.find(({ kind }) => kind !== "quantity")!;
   const name =
     options.name?.trim().replace(/\s+/gu, " ") ?? (named && shortNames[named.name as keyof RuleCatalogue]);
-  const { units = {}, bounds = {}, start = {}, fixed = {}, initial = {}, noise = {} } = frozenCopy(options);
+  const {
+    units = {},
+    bounds: given = {},
+    start = {},
+    fixed = {},
+    initial = {},
+    noise = {},
+  } = frozenCopy(options);
   const rule: Rule = {
     kind: "rule",
     ...(name !== undefined && { name }),
@@ -36,7 +55,8 @@ export function makeRule(text: string, options: RecurrenceOptions, named?: Named
     inputs: [...checked.inputs],
     parameters: [...checked.parameters],
     units,
-    bounds,
+    bounds: mapped(given, (each) => [hasMore(each) ? each.range : each]),
+    atBounds: mapped(given, (each) => (hasMore(each) ? [each.atBounds] : [])),
     start,
     fixed,
     initial,

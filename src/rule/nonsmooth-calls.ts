@@ -30,7 +30,7 @@ function callsIn(at: Expression): readonly Extract<Expression, { kind: "call" }>
  * Lists the function calls at which a step of the rule has a kink or a jump. Calls that depend on inputs and t alone
  * are left out: no fit varies them.
  *
- * @example roughness(recurrence("N[t+1] = max(N - c, 0)")).kinks[0].function; // "max"
+ * @example nonsmoothCalls(recurrence("N[t+1] = max(N - c, 0)")).kinks[0].function; // "max"
  */
 export function nonsmoothCalls(rule: Rule): NonsmoothCalls {
   const fixed = new Set(["t", ...rule.inputs]);

@@ -1,4 +1,13 @@
 import type { ProcessNoise } from "./rule.js";
+import type { AtBound } from "./state-bounds.js";
+
+/** Lowest and highest value; for a state also what becomes of it there. */
+export type Bounds =
+  | readonly [number, number]
+  | {
+      readonly range: readonly [number, number];
+      readonly atBounds: AtBound;
+    };
 
 /** Options of a rule. */
 export interface RecurrenceOptions {
@@ -10,9 +19,13 @@ export interface RecurrenceOptions {
   readonly inputs?: readonly string[];
   /** Unit by name. */
   readonly units?: Readonly<Record<string, string>>;
-  /** Lowest and highest admitted value by state or parameter; infinite where open. */
-  readonly bounds?: Readonly<Record<string, readonly [number, number]>>;
-  /** Where a fit starts, by parameter. */
+  /**
+   * Lower and upper bound by state or parameter, as in { K: [0, Infinity] }. For a state also what happens there:
+   * { N: { range: [0, 500], atBounds: "error" } }. Default: a state is absorbed at a lower bound of 0 (it stays 0); any
+   * other bound is an error of the rule, at which a path ends.
+   */
+  readonly bounds?: Readonly<Record<string, Bounds>>;
+  /** Starting value of a fit, by parameter. */
   readonly start?: Readonly<Record<string, number>>;
   /** Parameters held at a value in every fit, by name. */
   readonly fixed?: Readonly<Record<string, number>>;

@@ -1,5 +1,6 @@
 import type { Warning } from "../numeric/index.js";
 import type { NamedRule } from "./catalogue/named-rule.js";
+import type { AtBound } from "./state-bounds.js";
 
 /** Process noise of one state: added to the value (`normal`), or as a factor exp(sd*z) (`lognormal`). */
 export interface ProcessNoise {
@@ -34,6 +35,8 @@ export interface Rule {
   readonly units: Readonly<Record<string, string>>;
   /** Lower and upper bound by parameter or state. */
   readonly bounds: Readonly<Record<string, readonly [number, number]>>;
+  /** By state, where stated: what becomes of it at its bounds. */
+  readonly atBounds: Readonly<Record<string, AtBound>>;
   /** Starting values for a fit, by parameter. */
   readonly start: Readonly<Record<string, number>>;
   /** Parameters held at a value in every fit. */

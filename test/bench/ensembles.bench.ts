@@ -36,16 +36,14 @@ function onePath(): void {
 /** The steps of all paths, without what a projection does with every row. */
 function stepsAlone(): void {
   const present = new Float64Array(paths).fill(0.3);
-  const limits = Float64Array.of(-Number.MAX_VALUE, Number.MAX_VALUE);
   for (let block = 0; block < paths; block += 1024)
     for (let t = 0; t < periods; t++)
-      compiled.advance(present, block, Math.min(paths, block + 1024), parameters, [], t, limits);
+      compiled.advance(present, block, Math.min(paths, block + 1024), parameters, [], t);
 }
 
 function projected(sd: number): void {
   runEnsemble({
     compiled,
-    states: 1,
     width: 1,
     inputs: [],
     from: 0,
@@ -53,7 +51,14 @@ function projected(sd: number): void {
     starts: { paths, size: 1, parameters, initial: Float64Array.of(0.3) },
     change: [sd === 0 ? undefined : noiseDraw({ distribution: "lognormal", sd, centre: "mean" })],
     reading: [undefined],
-    limits: [[Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY]],
+    bounds: [
+      {
+        low: Number.NEGATIVE_INFINITY,
+        high: Number.POSITIVE_INFINITY,
+        absorbsLow: false,
+        absorbsHigh: false,
+      },
+    ],
     streams: blockStreams(randomStream(1), paths),
     onRow: () => undefined,
   });

@@ -77,7 +77,7 @@ test("the elasticities of the time to a density are those of its closed form", (
   expect(found.rows[0]!.name).toBe("r");
   expect(found.answer).toBeCloseTo(8.145, 3);
   expect(found.sentence).toMatch(
-    /^N rises to 0\.8 at hour 8\.14\d+; it hangs most on r: ten per cent lower and higher give hour 9\.05\d* and hour 7\.40\d*, about 1\.0% for each 1%\. What the record leaves open matters most through /,
+    /^N rises to 0\.8 at hour 8\.14\d+; it is most sensitive to r: ten per cent lower and higher give hour 9\.05\d* and hour 7\.40\d*, about 1\.0% for each 1%\. What the record leaves open matters most through /,
   );
 });
 
@@ -99,7 +99,7 @@ test("a table of choices shows time, level and risk of each setting, with the Mo
   const risks = found.rows.map((row) => row.answers["runs out"]!);
   expect(risks[0]!).toBeGreaterThan(risks[1]!);
   expect(risks[1]!).toBeGreaterThan(risks[2]!);
-  expect(found.rows[1]!.errors["runs out"]).toBeCloseTo(Math.sqrt((risks[1]! * (1 - risks[1]!)) / 2000), 12);
+  expect(found.rows[1]!.errors["runs out"]).toBeCloseTo(Math.sqrt((risks[1]! * (1 - risks[1]!)) / 4000), 12);
   // Source: the mean of a linear rule under additive noise is its path without noise: 20 - 15.5, 20, 20 + 15.5.
   for (const [i, exact] of [4.5, 20, 35.5].entries()) {
     const { answers, errors } = found.rows[i]!;
@@ -137,12 +137,12 @@ test("choices without an objective, or between nothing, are refused", () => {
   const rule = recurrence("x[t+1] = x + c");
   const given = { parameters: { c: 1 }, initial: { x: 0 }, periods: 4 };
   expect(() => optimize(rule, { ...given, vary: "c", range: [0, 1] })).toThrow(
-    'Say what is to be best: either { maximize } or { minimize }, with one measure, such as maximize: { total: "yield" }.',
+    'Give one of `maximize` and `minimize`, with a measure, such as maximize: { total: "yield" }.',
   );
   expect(() => tradeoff(rule, { ...given, vary: "c", values: [], answers: {} })).toThrow(
-    "A table of choices needs at least one setting in { values } and one measure in { answers }.",
+    "A table of choices needs at least one setting in `values` and one measure in `answers`.",
   );
   expect(() => sensitivity(rule, { ...given, answer: { level: "y", at: 1 } })).toThrow(
-    'The projection has nothing called "y" to measure. It has: x.',
+    'The projection has no state or quantity "y". It has: x.',
   );
 });

@@ -45,8 +45,32 @@ test.each([
 ])("a catch of %d from 500 ends the stock in year %s", (C, year) => {
   const rule = recurrence("ΔN = r*N*(1 - N/K) - C", { bounds: { N: [0, Number.POSITIVE_INFINITY] } });
   const run = trajectory(rule, { parameters: { r: 0.5, K: 1000, C }, initial: { N: 500 }, periods: 200 });
-  expect(run.stop.kind === "left-bounds" ? run.stop.period : undefined).toBe(year);
-  if (year === undefined) expect(run.values["N"]!.at(-1)).toBe(500);
+  expect(run.absorbed[0]?.period).toBe(year);
+  expect(run.stop.kind).toBe("complete");
+  expect(run.values["N"]!.at(-1)).toBe(year === undefined ? 500 : 0);
+});
+
+test("a bound that is an error of the rule ends the path with the value beyond it", () => {
+  const rule = recurrence("ΔN = r*N*(1 - N/K) - C", {
+    bounds: { N: { range: [0, Number.POSITIVE_INFINITY], atBounds: "error" } },
+  });
+  const run = trajectory(rule, {
+    parameters: { r: 0.5, K: 1000, C: 150 },
+    initial: { N: 500 },
+    periods: 200,
+  });
+  expect(run.stop.kind === "left-bounds" ? run.stop.period : undefined).toBe(12);
+  expect(run.values["N"]!.at(-1)).toBeLessThan(0);
+  expect(run.absorbed).toEqual([]);
+});
+
+test("an initial value beyond the bounds of its state is refused", () => {
+  const rule = recurrence("B[t+1] = B - C", { bounds: { B: [0, Number.POSITIVE_INFINITY] } });
+  expect(() =>
+    trajectory(rule, { parameters: { C: 1 }, initial: { B: -5 }, periods: 3 }),
+  ).toThrowErrorMatchingInlineSnapshot(
+    `[ModelError: The initial value of "B" is -5, and the rule bounds B to 0 to Infinity. Give an \`initial\` within them, or the rule other \`bounds\`.]`,
+  );
 });
 
 test("a named rule is not run outside its range", () => {

@@ -8,11 +8,16 @@ import { existsSync, readdirSync, readFileSync } from "node:fs";
 import { join, relative } from "node:path";
 import { pathToFileURL } from "node:url";
 import ts from "typescript";
-import { describe, expect, test } from "vitest";
+import { beforeEach, describe, expect, test } from "vitest";
 import * as periodwise from "../../kernel-helpers/index.js";
 import { scope } from "./scope.js";
 
 const root = join(import.meta.dirname, "..", "..");
+
+// An example may change the number format, which lasts; the next one begins with the standard one.
+beforeEach(() => {
+  periodwise.numberFormat("standard");
+});
 
 interface Example {
   readonly title: string;

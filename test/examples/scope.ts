@@ -33,6 +33,14 @@ async function make(): Promise<Readonly<Record<string, unknown>>> {
     { hour: [...yeast.keys()], density: [...yeast] },
     { period: "hour", step: { every: 1, of: "hour" }, value: "density" },
   );
+  const flasks = observations(
+    {
+      hour: [...yeast.keys(), ...yeast.keys()],
+      density: [...yeast, ...yeast.map((value, i) => value * (i % 2 === 0 ? 1.02 : 0.99))],
+      flask: [...yeast.map(() => "A"), ...yeast.map(() => "B")],
+    },
+    { period: "hour", step: { every: 1, of: "hour" }, by: "flask", value: "density" },
+  );
   const crowding = recurrence("ΔN = r*N*(1 - N/K)");
   const sheltered = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)");
   const crowdingFit = fit(crowding, counts, { errors: "observation" });
@@ -43,6 +51,7 @@ async function make(): Promise<Readonly<Record<string, unknown>>> {
   return {
     readings,
     counts,
+    flasks,
     crowding,
     sheltered,
     rule: sheltered,

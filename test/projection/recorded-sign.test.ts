@@ -29,7 +29,7 @@ describe("a path that goes below zero where no record was", () => {
     const [usual, high] = coded("leaves-recorded-sign");
     expect(usual).toBeUndefined();
     expect(high).toMatch(
-      /^By year 2035 the rule gives index = -\d+(\.\d)? under "high": no record of it was ever below 0; read nothing beyond year 20\d\d, or state \{ bounds: \{ index: \[0, Infinity\] \} \}\.$/,
+      /^By year 2035 the rule gives index = -\d+(\.\d)? under "high": no record of it was ever below 0\. Read nothing beyond year 20\d\d; if index ends at 0, give the rule the lower bound 0 for it\.$/,
     );
   });
 
@@ -37,12 +37,14 @@ describe("a path that goes below zero where no record was", () => {
     const [, high] = ahead({}).groups;
     const { central } = high!.states[0]!;
     const below = central.findIndex((value) => value < 0);
-    expect(coded("leaves-recorded-sign")[1]).toContain(`beyond year ${high!.time[below - 1]},`);
+    expect(coded("leaves-recorded-sign")[1]).toContain(`beyond year ${high!.time[below - 1]};`);
   });
 
   test("is left to the bounds where they are stated", () => {
     expect(coded("leaves-recorded-sign", { index: [0, Infinity] })).toEqual([undefined, undefined]);
-    expect(coded("path-leaves-range", { index: [0, Infinity] })[1]).toContain("the rule gives index = -");
+    expect(coded("paths-absorbed", { index: [0, Infinity] })[1]).toMatch(
+      /^100% of the paths reach the bound 0 of index before the end and stay there; they are counted at the bound\.$/,
+    );
     expect(coded("leaves-recorded-sign", { index: [-Infinity, Infinity] })).toEqual([undefined, undefined]);
   });
 });

@@ -149,13 +149,21 @@ test("schedules and one-off events reach the periods they name, and scenarios sh
     expect(missed![path * 7 + 3]! - usual![path * 7 + 3]!).toBeCloseTo(100, 9);
 });
 
-test("a path that leaves the range of a state stops, and it is said at which period", () => {
-  // DOMAIN of the trade, common practice: "Period 17: the rule gives -3.2; projection stopped at period 16."
-  const rule = recurrence("B[t+1] = B - C", { bounds: { B: [0, Infinity] } });
-  const found = simulate(rule, { parameters: { C: 30 }, initial: { B: 100 }, periods: 6 });
+test("a path that passes a bound stays there, or stops where that is an error; both are said with the period", () => {
+  // Source: 100 less 30 a period, by subtraction.
+  const run = { parameters: { C: 30 }, initial: { B: 100 }, periods: 6 };
+  const gone = simulate(recurrence("B[t+1] = B - C", { bounds: { B: [0, Infinity] } }), run);
+  expect(gone.groups[0]!.states[0]!.central).toEqual([100, 70, 40, 10, 0, 0, 0]);
+  expect(gone.groups[0]!.warnings.map((w) => w.message)).toEqual([
+    "B reaches its bound 0 at period 4 and stays there.",
+  ]);
+  const rule = recurrence("B[t+1] = B - C", {
+    bounds: { B: { range: [0, Infinity], atBounds: "error" } },
+  });
+  const found = simulate(rule, run);
   expect(found.groups[0]!.states[0]!.central).toEqual([100, 70, 40, 10, Number.NaN, Number.NaN, Number.NaN]);
   expect(found.groups[0]!.warnings.map((w) => w.message)).toEqual([
-    "At period 4 the rule gives B = -20; the path without random change stops at period 3.",
+    "At period 4 the rule gives B = -20, outside its range; the path without random change stops at period 3.",
   ]);
 });
 

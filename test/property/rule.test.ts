@@ -67,19 +67,17 @@ test("many paths abreast take the same steps as each alone", () => {
         Float64Array.from(rule.parameters, (name) => k * (name === "r" ? r : K)),
       );
       const states3 = own.map((_, k) => Float64Array.from(start.slice(0, width), (value) => value + 0.1 * k));
-      const limits = Float64Array.of(-100, 100, -100, 100);
       const flat = (rows: readonly Float64Array[]): Float64Array =>
         Float64Array.from(rows.flatMap((row) => [...row]));
       for (const compiled of [compileRule(rule), interpretRule(rule)]) {
         const each = flat(states3);
-        compiled.advanceEach(each, 0, 3, flat(own), inputs, 1, limits);
+        compiled.advanceEach(each, 0, 3, flat(own), inputs, 1);
         const shared = flat(states3);
-        compiled.advance(shared, 1, 3, own[0]!, inputs, 1, limits);
+        compiled.advance(shared, 1, 3, own[0]!, inputs, 1);
         const alone = (k: number, parameters: Float64Array): Float64Array => {
           const next = new Float64Array(width);
           compileRule(rule).step(states3[k]!, parameters, inputs, 1, next);
-          const outside = next.subarray(0, 2).some((value) => !(Math.abs(value) <= 100));
-          return outside ? next.fill(Number.NaN) : next;
+          return next;
         };
         expect(each).toEqual(flat([0, 1, 2].map((k) => alone(k, own[k]!))));
         expect(shared).toEqual(flat([states3[0]!, alone(1, own[0]!), alone(2, own[0]!)]));
@@ -89,22 +87,22 @@ test("many paths abreast take the same steps as each alone", () => {
   );
 });
 
-test("paths of one state abreast take the same steps, and end where they are not finite", () => {
+test("paths of one state abreast take the same steps, finite or not", () => {
   const starts = fc.array(fc.oneof(anyNumber, fc.constantFrom(0, 1e200, -1e200, Number.NaN)), {
     minLength: 1,
     maxLength: 40,
   });
   void fc.assert(
-    fc.property(expressionText(false), starts, fc.constantFrom(Number.MAX_VALUE, 50), (text, from, limit) => {
+    fc.property(expressionText(false), starts, (text, from) => {
       const one = text.replace(/P(\[t-2\])?|N\[t-1\]|\bu\b(\[t\+1\])?/gu, "N");
       const compiled = compileRule(recurrence(`N[t+1] = ${one} + 0*r*K + 0*N`));
       const parameters = Float64Array.of(0.75, 0.75);
       const present = Float64Array.from(from);
-      compiled.advance(present, 0, from.length, parameters, [], 3, Float64Array.of(-limit, limit));
+      compiled.advance(present, 0, from.length, parameters, [], 3);
       const alone = Float64Array.from(from, (value) => {
         const state = Float64Array.of(value);
         compiled.step(state, parameters, [], 3, state);
-        return Math.abs(state[0]!) <= limit ? state[0]! : Number.NaN;
+        return state[0]!;
       });
       expect(present).toEqual(alone);
     }),

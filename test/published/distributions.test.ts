@@ -116,13 +116,13 @@ describe("a distribution", () => {
   });
 
   test.each<[Name, Parameters, number, number]>([
-    ["gamma", [2, 4], -1, Number.POSITIVE_INFINITY],
+    ["gamma", [0.5, 4], -1, Number.POSITIVE_INFINITY],
     ["exponential", [4], -1, Number.POSITIVE_INFINITY],
     ["lognormal", [0, 1], -1, Number.POSITIVE_INFINITY],
-    ["f", [3, 7], -1, Number.POSITIVE_INFINITY],
+    ["f", [1, 7], -1, Number.POSITIVE_INFINITY],
     ["t", [3], Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY],
     ["normal", [0, 1], Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY],
-    ["beta", [2, 3], -0.1, 1.1],
+    ["beta", [0.5, 0.5], -0.1, 1.1],
     ["uniform", [2, 3], 1, 4],
     ["poisson", [4], -1, Number.POSITIVE_INFINITY],
     ["binomial", [4, 0.5], -1, 5],

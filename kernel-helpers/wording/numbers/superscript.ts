@@ -17,7 +17,7 @@ const superscripts: Readonly<Record<string, string>> = {
  *
  * A number before a power of ten is told apart from it.
  *
- * @example raised("120 10^4 cells/mL"); // "120 × 10⁴ cells/mL"
+ * @example superscript("120 10^4 cells/mL"); // "120 × 10⁴ cells/mL"
  */
 export function superscript(text: string): string {
   const multiplied = text.replace(/(?<=\d) +(?=10\^-?\d)/g, " × ");

@@ -1,5 +1,5 @@
 import type { Measure } from "../measure/measure.js";
-import type { StandingOptions } from "../setting/standing.js";
+import type { DecisionOptions } from "../setting/decision-context.js";
 
 /** An interval for a setting, from what the record leaves uncertain. */
 export interface SettingMargin {
@@ -26,34 +26,49 @@ export type DatedTarget = Extract<Measure, { readonly time: string }> &
   );
 
 /** Options of `solveFor`. */
-export interface SolveOptions extends StandingOptions {
-  /** What is varied: a parameter, a first value such as "N[0]", or an input, whose usual level is set. */
+export interface SolveOptions extends DecisionOptions {
+  /** A parameter, a first value such as "N[0]", or an input whose usual level is sought. */
   readonly vary: string;
   /** What is to be met: a measure that `is` a value, is `atMost` it or `atLeast` it. */
   readonly until: Target | DatedTarget;
   /** Lowest and highest value looked at; default a hundredth to a hundred times the present one, within its bounds. */
   readonly range?: readonly [number, number];
   /**
-   * The value comes in multiples of this (0.01 for money, 1 for pieces), rounded to the side that meets the
-   * target.
+   * The setting comes in multiples of this (0.01 for money, 1 for pieces). With `atMost` and `atLeast` only multiples
+   * are tried, and the first that meets the target is given; with `is` the nearest multiple.
    */
   readonly multiple?: number;
   /** Confidence level of the interval, between 0 and 1; default 0.95. */
   readonly level?: number;
 }
 
+/** A setting with the measure there. */
+export interface Tried {
+  readonly value: number;
+  readonly achieved: number;
+}
+
 /** One setting that meets the target. */
-export interface Solution {
+export interface Solution extends Tried {
   /** Rounded to the multiple asked for. */
   readonly value: number;
+  /** Before it was rounded. */
   readonly exact: number;
   /** The measure at `value`, with its Monte-Carlo error where it is simulated. */
   readonly achieved: number;
   readonly achievedError: number;
+  /** Share of the paths that ended outside the range of a state, without which the measure is. */
+  readonly left: number;
   /** Which side of the setting meets an `atMost` or `atLeast`. */
   readonly meets: "this value only" | "this value and above" | "this value and below";
   /** From the uncertainty of a fit's parameters; absent for a rule, and where the measure is a probability, which carries it. */
   readonly margin: SettingMargin | undefined;
+}
+
+/** A place at which the measure jumps over the value that it is to be: the settings on either side of it. */
+export interface Jump {
+  readonly below: Tried;
+  readonly above: Tried;
 }
 
 /** Settings that meet a target. */
@@ -64,13 +79,21 @@ export interface Solved {
   readonly target: Target;
   /** The measure in words. */
   readonly measure: string;
+  /** What the measure is counted in. */
+  readonly measureUnit: string;
+  /** Whether the measure is simulated, so that it has a Monte-Carlo error. */
+  readonly simulated: boolean;
   readonly range: readonly [number, number];
+  /** The setting comes in multiples of this; undefined where any value will do. */
+  readonly multiple: number | undefined;
   /** By increasing value; empty where nothing in the range meets the target, or everything does. */
   readonly solutions: readonly Solution[];
+  /** Where the measure jumps over an `is`, which no setting there meets. */
+  readonly jumps: readonly Jump[];
   /** Whether every setting looked at meets the target; then the smallest and the largest measure found. */
   readonly everywhere: readonly [number, number] | undefined;
-  /** The nearest miss: a setting, and the measure there. */
-  readonly nearest: { readonly value: number; readonly achieved: number };
+  /** The nearest miss. */
+  readonly nearest: Tried;
   readonly level: number;
   readonly sentence: string;
 }

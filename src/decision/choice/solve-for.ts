@@ -1,35 +1,40 @@
-import { type Fit, problemOf } from "../../estimate/index.js";
+import type { Fit } from "../../estimate/index.js";
 import type { Rule } from "../../rule/index.js";
-import { isProbability, type Measure, measureWords } from "../measure/measure.js";
-import { measureReader } from "../measure/read-measure.js";
-import { type Estimated, probabilityReader } from "../measure/read-probability.js";
 import {
-  refuseBounds,
-  refuseNoEffect,
-  refuseNoRange,
-  refuseNoTarget,
-  refusePastAlready,
-  refuseProbabilityTarget,
-} from "../refusals.js";
+  noEffectError,
+  noRangeError,
+  noTargetError,
+  pastAlreadyError,
+  probabilityTargetError,
+} from "../errors.js";
+import { isProbability } from "../measure/measure.js";
+import { measureUnit, measureWords } from "../measure/measure-words.js";
+import { type MeasureReader, measureReader, type Reading } from "../measure/read-measure.js";
+import { type DecisionContext, decisionContext } from "../setting/decision-context.js";
 import { type Setting, settingOf } from "../setting/set-value.js";
 import { settingMargin } from "../setting/setting-margin.js";
-import { withUnplanned } from "../setting/setting-range.js";
-import { isFit, type Standing, standingOf } from "../setting/standing.js";
+import { checkedRange, withUnplanned } from "../setting/setting-range.js";
 import { opened } from "../words/amount.js";
-import type { DatedTarget, Solution, Solved, SolveOptions, Target } from "./solution.js";
+import type { DatedTarget, Jump, Solution, Solved, SolveOptions, Target } from "./solution.js";
 import { pastAlready, signNotes } from "./solve-notes.js";
 import { solveSentence } from "./solve-sentence.js";
-import { type Roots, solveWithin } from "./solve-within.js";
+import { type Crossing, onMultiple, type Roots, solveWithin } from "./solve-within.js";
+
+/** Places looked at first, and relative width at which the search ends, where every look is a simulation. */
+const simulatedLooks = 12;
+const simulatedTolerance = 1e-5;
 
 /**
  * Finds what a parameter, a first value or the level of an input must be, so that a measure of the projection meets a target.
  *
- * The range is looked over for every crossing, so several solutions, and none, are answers. For a fit each solution
- * has an interval from 400 draws of the parameters, each solved anew; a probability carries the parameters' uncertainty and
- * the random change itself.
+ * The range is looked over for every crossing, so several solutions, and none, are answers; a jump of the measure over
+ * the target is no solution, and its two sides are given. A setting of a fit holds from the record's end. Where chance
+ * has a part, every setting meets the same random numbers, and the measure is its mean over the paths (a time its median),
+ * the probability, or the `quantile` asked for. For a fit each solution has an interval from 400 draws of the
+ * parameters; a probability carries their uncertainty itself.
  *
  * @param options.vary - its unit is that of the parameter, state or input.
- * @throws {ModelError} `no-such-setting` | `no-effect` | `past-already` | `probability-outside` | `no-range` | `bounds-contradict` | `no-target` |
+ * @throws {ModelError} `no-such-setting` | `no-effect` | `past-already` | `probability-outside` | `no-range` | `range-contradicts` | `no-target` |
  *   `future-input-missing` | `outside-projection` | `unknown-name`.
  * @example
  * const loan = recurrence("owed[t+1] = owed*(1 + i) - payment", { fixed: { i: 0.01 } });
@@ -38,76 +43,94 @@ import { type Roots, solveWithin } from "./solve-within.js";
  * asked.solutions[0].value // 1000*0.01/(1 - 1.01**-12)
  */
 export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
-  const { vary: unknown, level = 0.95 } = options;
-  const setting = rangeable(subject, options);
-  const standing = standingOf(subject, withUnplanned(subject, options, unknown, setting.between));
-  const until = numericTarget(options.until, standing);
+  const { vary, level = 0.95, multiple } = options;
+  const given = checkedRange(subject, options);
+  const context = decisionContext(subject, withUnplanned(subject, options, vary, given));
+  const until = numericTarget(options.until, context);
   const aim = aimOf(until);
-  const found = settingOf(standing, unknown);
-  const reader = readerOf(standing, until, found);
-  const tolerance = options.multiple === undefined ? 0 : 0.01 * options.multiple;
-  const excess = (value: number): number => sidedExcess(until, reader(value).value - aim);
-  const [from, to] = setting.between ?? rangeOf(found);
-  const roots = solveWithin(excess, from, to, {
-    tolerance,
+  const setting = settingOf(context, vary);
+  const range = given ?? rangeOf(setting);
+  const reader = measureReader(context, until);
+  const search = searchOf(reader, setting, until, aim);
+  const roots = solveWithin(search.excess, range[0], range[1], {
     edge: until.is === undefined,
-    // A probability takes a whole run at every place.
-    ...(isProbability(until) && { looks: 12 }),
+    multiple: until.is === undefined ? multiple : undefined,
+    ...(reader.simulated && { looks: simulatedLooks, tolerance: simulatedTolerance, slack: search.slack }),
   });
   const everywhere = measuredWhereAllMeet(roots, aim, until);
-  const past = pastAlready(standing, until, found);
-  if (roots.flat && past !== undefined) throw refusePastAlready(past);
-  if (everywhere === undefined && hasNoEffect(roots, aim, until))
-    throw refuseNoEffect(unknown, measureWords(until, standing));
-  const solutions = roots.roots.map((root) =>
-    solutionAt(standing, found, until, root, reader, excess, options),
-  );
-  const question = {
-    vary: unknown,
-    unit: standing.unitOf(unknown),
+  const past = pastAlready(context, until, setting);
+  if (roots.flat && past !== undefined) throw pastAlreadyError(past);
+  const measure = measureWords(until, context);
+  if (everywhere === undefined && hasNoEffect(roots, aim, until)) throw noEffectError(vary, measure);
+  const solutions = roots.roots
+    .filter(({ jumps }) => !jumps)
+    .map((root) => solutionAt(context, setting, until, root, search, options));
+  const answer = {
+    vary,
+    unit: context.unitOf(vary),
     target: until,
-    measure: measureWords(until, standing),
-    range: [from, to] as const,
+    measure,
+    measureUnit: measureUnit(until, context),
+    simulated: reader.simulated,
+    range,
+    multiple,
     level,
+    solutions,
+    jumps: roots.roots.filter(({ jumps }) => jumps).map((root) => jumpAt(root, search)),
+    everywhere,
+    nearest: { value: roots.nearest, achieved: search.read(roots.nearest).value },
   };
-  const answer = { ...question, solutions, everywhere, nearest: nearestOf(roots, reader) };
   const sentence = [
-    solveSentence(answer, standing),
+    solveSentence(answer, context),
     ...(past === undefined ? [] : [`${opened(past)}.`]),
     ...solutions
       .slice(0, 1)
-      .flatMap(({ value, achieved }) => signNotes(standing, found, value, until, achieved)),
+      .flatMap(({ value }) => signNotes(context, setting, value, until, search.read(value))),
   ].join(" ");
   return { kind: "solution", ...answer, sentence };
 }
 
-function rangeable(
-  subject: Fit | Rule,
-  { range: between, vary: unknown }: SolveOptions,
-): { between?: readonly [number, number] } {
-  if (between === undefined) return {};
-  const [from, to] = between;
-  const own = isFit(subject) ? subject.rule : subject;
-  const bounds = isFit(subject) ? problemOf(subject).bounds(unknown) : own.bounds[unknown];
-  if (!(from < to)) throw refuseBounds(unknown, from, to, "the first must be the smaller one");
-  if (bounds !== undefined && (to < bounds[0] || from > bounds[1]))
-    throw refuseBounds(unknown, from, to, `the rule admits ${bounds[0]} to ${bounds[1]}`);
-  return { between };
-}
-
-/** The value asked for; of a probability between 0 and 1. */
 /** A target whose label of a period is replaced by the time that measures are in. */
-function numericTarget(target: Target | DatedTarget, { timeOf }: Standing): Target {
+function numericTarget(target: Target | DatedTarget, { timeOf }: DecisionContext): Target {
   const key = (["is", "atMost", "atLeast"] as const).find((each) => typeof target[each] === "string");
   // Of the keys of a target only one is set.
   return key === undefined ? (target as Target) : ({ ...target, [key]: timeOf(target[key]!) } as Target);
 }
 
+/** The value asked for; of a probability between 0 and 1. */
 function aimOf(target: Target): number {
   const aim = target.is ?? target.atMost ?? target.atLeast;
-  if (aim === undefined || !Number.isFinite(aim)) throw refuseNoTarget(aim);
-  if (isProbability(target) && !(aim >= 0 && aim <= 1)) throw refuseProbabilityTarget(aim);
+  if (aim === undefined || !Number.isFinite(aim)) throw noTargetError(aim);
+  if (isProbability(target) && !(aim >= 0 && aim <= 1)) throw probabilityTargetError(aim);
   return aim;
+}
+
+/** The measure at settings, each read once, and by how much it misses the target. */
+interface Search {
+  readonly read: (value: number) => Reading;
+  /** Above zero where the target is missed; for `is` the plain difference. */
+  readonly excess: (value: number) => number;
+  /** Twice the Monte-Carlo error. */
+  readonly slack: (value: number) => number;
+}
+
+function searchOf(reader: MeasureReader, setting: Setting, target: Target, aim: number): Search {
+  const known = new Map<number, Reading>();
+  const read = (value: number): Reading => {
+    const found = known.get(value) ?? reader.read({ setting, value });
+    known.set(value, found);
+    return found;
+  };
+  return {
+    read,
+    excess: (value) => sidedExcess(target, read(value).value - aim),
+    slack: (value) => 2 * read(value).error,
+  };
+}
+
+/** Above zero where the target is missed; for `is` the plain difference. */
+function sidedExcess(target: Target, difference: number): number {
+  return target.atLeast === undefined ? difference : -difference;
 }
 
 /** Smallest and largest measure where no place misses the target. */
@@ -123,73 +146,41 @@ function hasNoEffect({ flat, least }: Roots, aim: number, target: Target): boole
   return !(isProbability(target) && (measure === 0 || measure === 1));
 }
 
-type Reader = (value: number) => Estimated;
-
-function readerOf(standing: Standing, measure: Measure, setting: Setting): Reader {
-  if (isProbability(measure)) {
-    const read = probabilityReader(standing, measure);
-    return (value) => read(setting, value);
-  }
-  const read = measureReader(standing, measure);
-  return (value) => ({ value: read(setting.at(value)), error: 0 });
-}
-
-/** Above zero where the target is missed; for `is` the plain difference. */
-function sidedExcess(target: Target, difference: number): number {
-  return target.atLeast === undefined ? difference : -difference;
-}
-
 function rangeOf({ name, now, bounds }: Setting): readonly [number, number] {
   if (now === undefined || now === 0 || !Number.isFinite(now)) {
     if (bounds.every(Number.isFinite)) return bounds;
-    throw refuseNoRange(name);
+    throw noRangeError(name);
   }
   const wide = [now / 100, now * 100].sort((a, b) => a - b) as [number, number];
   return [Math.max(wide[0], bounds[0]), Math.min(wide[1], bounds[1])];
 }
 
 function solutionAt(
-  standing: Standing,
+  context: DecisionContext,
   setting: Setting,
   target: Target,
-  root: number,
-  reader: Reader,
-  excess: (value: number) => number,
-  options: SolveOptions,
+  root: Crossing,
+  { excess, read }: Search,
+  { level = 0.95, multiple }: SolveOptions,
 ): Solution {
-  const step = Math.max(Math.abs(root) * 1e-6, 1e-12, options.multiple ?? 0);
   const sided = target.is === undefined;
-  const above = sided && excess(root + step) <= 0;
-  const value = onMultiple(root, options.multiple, excess, sided ? above : undefined);
-  const achieved = reader(value);
+  const above = sided && (root.at === root.below ? excess(root.above) <= 0 : true);
+  const value = sided ? root.at : onMultiple(root.at, multiple);
+  const { value: achieved, error: achievedError, left } = read(value);
   return {
     value,
-    exact: root,
-    achieved: achieved.value,
-    achievedError: achieved.error,
+    exact: root.at,
+    achieved,
+    achievedError,
+    left,
     meets: sided ? (above ? "this value and above" : "this value and below") : "this value only",
-    margin: isProbability(target)
-      ? undefined
-      : settingMargin(standing, setting, target, root, options.level ?? 0.95),
+    margin: settingMargin(context, setting, target, root.at, level),
   };
 }
 
-/** The multiple nearest to a root that still meets the target; `above` says on which side those lie. */
-function onMultiple(
-  root: number,
-  multiple: number | undefined,
-  excess: (value: number) => number,
-  above: boolean | undefined,
-): number {
-  if (multiple === undefined) return root;
-  const counted = (count: number): number => Number((count * multiple).toPrecision(15));
-  if (above === undefined) return counted(Math.round(root / multiple));
-  const outward = above ? 1 : -1;
-  let count = above ? Math.floor(root / multiple) : Math.ceil(root / multiple);
-  for (let k = 0; k < 3 && excess(counted(count)) > 0; k++) count += outward;
-  return counted(count);
-}
-
-function nearestOf({ nearest }: Roots, reader: Reader): Solved["nearest"] {
-  return { value: nearest.at, achieved: reader(nearest.at).value };
+function jumpAt({ below, above }: Crossing, { read }: Search): Jump {
+  return {
+    below: { value: below, achieved: read(below).value },
+    above: { value: above, achieved: read(above).value },
+  };
 }

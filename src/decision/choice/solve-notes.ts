@@ -1,51 +1,74 @@
-import { centralPath, levelSide, recordedSignWarnings } from "../../projection/index.js";
-import type { Measure } from "../measure/measure.js";
-import type { Setting } from "../setting/set-value.js";
-import type { Standing } from "../setting/standing.js";
-import { amount, plain } from "../words/amount.js";
-import type { Target } from "./solution.js";
+import {
+  centralPath,
+  type FitGround,
+  levelSide,
+  pastBy,
+  recordedSignWarnings,
+} from "../../projection/index.js";
+import { isOfLevel, type Measure, measureOf } from "../measure/measure.js";
+import { levelWords } from "../measure/measure-words.js";
+import type { Reading } from "../measure/read-measure.js";
+import type { DecisionContext } from "../setting/decision-context.js";
+import { groundAt, type Setting } from "../setting/set-value.js";
+import { amount, percent, plain } from "../words/amount.js";
 
-/** What is past its value at the start already, as a clause; undefined where nothing is, or the start itself is sought. */
-export function pastAlready(standing: Standing, target: Target, setting: Setting): string | undefined {
-  if (!("time" in target || "probability" in target)) return undefined;
-  const state = "time" in target ? target.time : target.probability;
-  const place = standing.rule.states.indexOf(state);
-  if (place < 0 || setting.role === "initial") return undefined;
-  const row = "time" in target ? 0 : standing.present;
-  const now = centralPath(standing.ground).values[place]![row]!;
-  const { value, sign } = levelSide(target);
-  if (!(sign * (now - value) >= 0)) return undefined;
-  const unit = standing.unitOf(state);
-  return `${state} begins at ${amount(plain(now, 4), unit)}, already at or ${sign < 0 ? "below" : "above"} ${amount(plain(value, 12), unit)}`;
+/** What is past its level at the present already, as a clause; undefined where nothing is, or the start itself is sought. */
+export function pastAlready(context: DecisionContext, target: Measure, setting: Setting): string | undefined {
+  const { kind, name } = measureOf(target);
+  const { rule, ground } = context;
+  const place = rule.states.indexOf(name);
+  if (!isOfLevel(target) || kind === "share" || place < 0 || setting.role === "initial") return undefined;
+  const now = centralPath(ground).values[place]![ground.present]!;
+  const { sign } = levelSide(target);
+  if (!(pastBy(now, context.levelAt(target), sign) >= 0)) return undefined;
+  const begins = ground.present === 0 ? "begins" : "stands";
+  return `${name} ${begins} at ${amount(plain(now, 4), context.unitOf(name))}, already at or ${sign < 0 ? "below" : "above"} ${levelWords(target, name, context)}`;
 }
 
 /**
  * For a fit: what the rule does below zero with a setting at a value, as far as a measure is read from there.
  *
- * @param achieved - the measure there.
+ * @param reading - the measure there; what lies below zero by less than two of its errors is chance.
  */
 export function signNotes(
-  standing: Standing,
+  context: DecisionContext,
   setting: Setting,
   value: number,
   measure: Measure,
-  achieved: number,
+  { value: achieved, error }: Pick<Reading, "value" | "error">,
 ): string[] {
-  const { fitGround, fit } = standing;
+  const { fitGround, fit, timeAt, timeWords } = context;
   if (fitGround === undefined || fit === undefined) return [];
-  const ground = { ...fitGround, ...setting.at(value) };
-  const last = lastRead(standing, measure, achieved);
-  const period = (row: number): string => standing.timeWords(standing.timeAt(row));
-  const central = centralPath(ground);
+  const ground: FitGround = { ...fitGround, ...groundAt(context, { setting, value }) };
+  const last = lastRead(context, measure, achieved);
+  const period = (row: number): string => timeWords(timeAt(row));
   const scenario = `${setting.name} ${plain(value, 4)}`;
-  return recordedSignWarnings({ central, ground, scenario, period, last }).map(({ message }) => message);
+  return recordedSignWarnings({
+    central: centralPath(ground),
+    ground,
+    scenario,
+    period,
+    last,
+    slack: 2 * error,
+  }).map(({ message }) => message);
 }
 
 /** The last row that a measure reads. */
-function lastRead(standing: Standing, target: Measure, achieved: number): number {
-  const { present, ground, timeAt } = standing;
-  if ("level" in target) return present + target.at;
+function lastRead({ ground, timeAt }: DecisionContext, target: Measure, achieved: number): number {
+  const { present, periods } = ground;
+  if ("at" in target) return present + target.at;
   if ("time" in target && Number.isFinite(achieved))
     return Math.floor((achieved - timeAt(0)) / (timeAt(1) - timeAt(0)));
-  return "to" in target && target.to !== undefined ? present + target.to : ground.periods;
+  return "to" in target && target.to !== undefined ? present + target.to : periods;
+}
+
+/**
+ * That a number does without the paths that ended outside the range of a state; "" where none did.
+ *
+ * @param where - of which setting, as " with d at 16".
+ */
+export function leftWords(left: number, paths: number, where: string = ""): string {
+  if (!(left > 0)) return "";
+  const share = percent(left, Math.sqrt((left * (1 - left)) / paths));
+  return ` ${share} of the paths${where} leave the range of a state: a mean is that of the others, and they count as not getting to a level.`;
 }

@@ -1,19 +1,18 @@
 import type { Fit } from "../../estimate/index.js";
 import type { Rule } from "../../rule/index.js";
-import { isProbability, type Measure, measuredWords, measureWords } from "../measure/measure.js";
-import { expectedReader } from "../measure/read-expected.js";
+import { noValuesError } from "../errors.js";
+import type { Measure } from "../measure/measure.js";
+import { measuredWords, measureWords } from "../measure/measure-words.js";
 import { measureReader } from "../measure/read-measure.js";
-import { type Estimated, probabilityReader } from "../measure/read-probability.js";
-import { refuseNoValues } from "../refusals.js";
-import { type Setting, settingOf } from "../setting/set-value.js";
+import { type DecisionContext, type DecisionOptions, decisionContext } from "../setting/decision-context.js";
+import { settingOf } from "../setting/set-value.js";
 import { withUnplanned } from "../setting/setting-range.js";
-import { type Standing, type StandingOptions, standingOf } from "../setting/standing.js";
 import { amount, plain } from "../words/amount.js";
-import { signNotes } from "./solve-notes.js";
+import { leftWords, signNotes } from "./solve-notes.js";
 
 /** Options of `tradeoff`. */
-export interface TradeoffOptions extends StandingOptions {
-  /** What is varied: a parameter, a first value such as "N[0]", or an input, whose usual level is set. */
+export interface TradeoffOptions extends DecisionOptions {
+  /** A parameter, a first value such as "N[0]", or an input whose usual level is chosen. */
   readonly vary: string;
   /** Values to look at: a list, or two ends with how many. */
   readonly values:
@@ -38,17 +37,26 @@ export interface Tradeoff {
   /** By answer: what is measured, in words. */
   readonly measures: Readonly<Record<string, string>>;
   readonly answers: Readonly<Record<string, Measure>>;
-  /** By setting: every answer, and the Monte-Carlo error of each (0 where nothing is random). */
-  readonly rows: readonly {
-    readonly value: number;
-    readonly answers: Readonly<Record<string, number>>;
-    readonly errors: Readonly<Record<string, number>>;
-  }[];
+  readonly rows: readonly TradeoffRow[];
   readonly sentence: string;
+}
+
+/** What one setting brings. */
+export interface TradeoffRow {
+  readonly value: number;
+  /** By answer; infinite for a time that is never reached, NaN where no path stays within its range. */
+  readonly answers: Readonly<Record<string, number>>;
+  /** By answer: its Monte-Carlo error, 0 where nothing is random. */
+  readonly errors: Readonly<Record<string, number>>;
+  /** Largest share of paths that ended outside the range of a state, without which an answer is. */
+  readonly left: number;
 }
 
 /**
  * Answers against a setting: time, cost and probability of each choice, all with the same random numbers.
+ *
+ * A setting of a fit holds from the record's end. Where chance has a part, an answer is its mean over the paths (a time
+ * its median), the probability, or the `quantile` asked for, with its Monte-Carlo error.
  *
  * @throws {ModelError} `no-such-setting` | `no-values` | `unknown-name` | `outside-projection` | `nothing-random`.
  * @example
@@ -58,41 +66,45 @@ export interface Tradeoff {
  * found.rows.length // 2
  */
 export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeoff {
-  const { vary: name, answers } = options;
+  const { vary, answers } = options;
   const values = valuesOf(options.values);
   const first = values[0];
-  if (first === undefined || Object.keys(answers).length === 0) throw refuseNoValues();
-  const standing = standingOf(subject, withUnplanned(subject, options, name, [first, first]));
-  const setting = settingOf(standing, name);
+  if (first === undefined || Object.keys(answers).length === 0) throw noValuesError();
+  const context = decisionContext(subject, withUnplanned(subject, options, vary, [first, first]));
+  const setting = settingOf(context, vary);
   const readers = Object.entries(answers).map(([shown, measure]) => ({
     shown,
-    read: readerOf(standing, setting, measure),
+    read: measureReader(context, measure).read,
   }));
-  const rows = values.map((value) => {
-    const found = readers.map(({ shown, read }) => [shown, read(value)] as const);
+  const rows = values.map((value): TradeoffRow => {
+    const found = readers.map(({ shown, read }) => [shown, read({ setting, value })] as const);
     return {
       value,
       answers: Object.fromEntries(found.map(([shown, each]) => [shown, each.value])),
       errors: Object.fromEntries(found.map(([shown, each]) => [shown, each.error])),
+      left: Math.max(...found.map(([, each]) => each.left)),
     };
   });
   const measures = Object.fromEntries(
-    Object.entries(answers).map(([shown, measure]) => [shown, measureWords(measure, standing)]),
+    Object.entries(answers).map(([shown, measure]) => [shown, measureWords(measure, context)]),
   );
-  const unit = standing.unitOf(name);
+  const unit = context.unitOf(vary);
   const notes = [rows[0]!, rows[rows.length - 1]!].flatMap((row) =>
     Object.entries(answers).flatMap(([shown, measure]) =>
-      signNotes(standing, setting, row.value, measure, row.answers[shown]!),
+      signNotes(context, setting, row.value, measure, {
+        value: row.answers[shown]!,
+        error: row.errors[shown]!,
+      }),
     ),
   );
   return {
     kind: "tradeoff",
-    vary: name,
+    vary,
     unit,
     measures,
     answers,
     rows,
-    sentence: [sentenceOf(name, unit, rows, answers, standing), ...new Set(notes)].join(" "),
+    sentence: [sentenceOf(vary, unit, rows, answers, context), ...new Set(notes)].join(" "),
   };
 }
 
@@ -103,39 +115,26 @@ function valuesOf(values: TradeoffOptions["values"]): readonly number[] {
   );
 }
 
-/** Under random change what is expected is the mean over paths; times and parameters are those of the central path. */
-function readerOf(standing: Standing, setting: Setting, measure: Measure): (value: number) => Estimated {
-  if (isProbability(measure)) {
-    const read = probabilityReader(standing, measure);
-    return (value) => read(setting, value);
-  }
-  const random = standing.change.some((noise) => noise !== undefined);
-  if (random && !("time" in measure) && !("parameter" in measure)) {
-    const read = expectedReader(standing, measure);
-    return (value) => read(setting, value);
-  }
-  const read = measureReader(standing, measure);
-  return (value) => ({ value: read(setting.at(value)), error: 0 });
-}
-
 function sentenceOf(
-  name: string,
+  vary: string,
   unit: string,
-  rows: Tradeoff["rows"],
+  rows: readonly TradeoffRow[],
   answers: Tradeoff["answers"],
-  standing: Standing,
+  context: DecisionContext,
 ): string {
   const ends = rows.length === 1 ? [rows[0]!] : [rows[0]!, rows[rows.length - 1]!];
   const said = ends.map((row) => {
-    const each = Object.entries(answers).map(([shown, measure]) => {
-      const value = row.answers[shown]!;
-      const words =
-        value === Number.POSITIVE_INFINITY
-          ? "never within the projection"
-          : measuredWords(measure, value, row.errors[shown]!, standing);
-      return `${shown} ${words}`;
-    });
-    return `with ${name} at ${amount(plain(row.value, 6), unit)}: ${each.join(", ")}`;
+    const each = Object.entries(answers).map(
+      ([shown, measure]) =>
+        `${shown} ${measuredWords(measure, row.answers[shown]!, row.errors[shown]!, context)}`,
+    );
+    return `with ${vary} at ${amount(plain(row.value, 6), unit)}: ${each.join(", ")}`;
   });
-  return `${said.join("; ")}.`.replace(/^w/, "W");
+  const worst = ends.reduce((most, row) => (row.left > most.left ? row : most));
+  const left = leftWords(
+    worst.left,
+    context.paths,
+    ` with ${vary} at ${amount(plain(worst.value, 6), unit)}`,
+  );
+  return `${said.join("; ")}.${left}`.replace(/^w/, "W");
 }

@@ -1,5 +1,6 @@
-import { type CrossedLevel, levelSide } from "../../projection/index.js";
-import { amount, percent, plain } from "../words/amount.js";
+import { type CrossedLevel, checkLevel, placeOf } from "../../projection/index.js";
+import type { Rule } from "../../rule/index.js";
+import { measureNameError, measureWindowError, quantileError } from "../errors.js";
 
 /** Periods over which a measure is taken, counted from the present: 1 is the next one. Default: all. */
 interface Window {
@@ -7,103 +8,92 @@ interface Window {
   readonly to?: number;
 }
 
+/** Which quantile of the paths is taken instead of their mean (of a time: instead of the median), as 0.95. */
+interface Quantile {
+  readonly quantile?: number;
+}
+
 /**
  * A number read off a projection. Names are states or quantities of the rule.
  *
- * `level`: a state `at` a period ahead. `average`, `total`, `lowest`, `highest`: over a window of periods. `time`: when
- * a state first rises or falls to a level, in the unit of the period column. `probability`: the chance that it ever
- * does within the projection. `parameter`: a parameter of the rule itself.
+ * `level`: the value `at` a period ahead. `average`, `total`, `lowest`, `highest`: over a window of periods. `share`:
+ * of the periods of a window, those at or past a level. `time`: when a level is first reached, in the unit of the
+ * period column. `probability`: the chance that it is reached within the window. `parameter`: a parameter of the rule
+ * itself.
+ *
+ * Where chance has a part, a measure is its mean over the paths (a time its median), or the `quantile` asked for.
  */
 export type Measure =
-  | { readonly level: string; readonly at: number }
-  | ({ readonly average: string } & Window)
-  | ({ readonly total: string } & Window)
-  | ({ readonly lowest: string } & Window)
-  | ({ readonly highest: string } & Window)
-  | ({ readonly time: string } & CrossedLevel)
-  | ({ readonly probability: string } & CrossedLevel)
+  | ({ readonly level: string; readonly at: number } & Quantile)
+  | ({ readonly average: string } & Window & Quantile)
+  | ({ readonly total: string } & Window & Quantile)
+  | ({ readonly lowest: string } & Window & Quantile)
+  | ({ readonly highest: string } & Window & Quantile)
+  | ({ readonly share: string } & CrossedLevel & Window & Quantile)
+  | ({ readonly time: string } & CrossedLevel & Quantile)
+  | ({ readonly probability: string } & CrossedLevel & Window)
   | { readonly parameter: string };
 
-/** What a measure does, with the name it is taken of. */
-export type MeasureKind =
-  | "level"
-  | "average"
-  | "total"
-  | "lowest"
-  | "highest"
-  | "time"
-  | "probability"
-  | "parameter";
-
-const kinds: readonly MeasureKind[] = [
+const kinds = [
   "level",
   "average",
   "total",
   "lowest",
   "highest",
+  "share",
   "time",
   "probability",
   "parameter",
-];
+] as const;
+
+/** What a measure does. */
+export type MeasureKind = (typeof kinds)[number];
+
+/** A measure taken apart and checked against a rule. */
+export interface PlacedMeasure {
+  readonly kind: MeasureKind;
+  /** What it is taken of, and its place: among the parameters, or among the states and then the quantities. */
+  readonly name: string;
+  readonly place: number;
+  /** First and last period ahead that count. */
+  readonly first: number;
+  readonly last: number;
+  /** Of a share, time or probability. */
+  readonly level: CrossedLevel | undefined;
+  /** Asked for; undefined for the mean, and of a time for the median. */
+  readonly quantile: number | undefined;
+}
 
 /** The kind of a measure and the name that it is taken of. */
 export function measureOf(measure: Measure): { readonly kind: MeasureKind; readonly name: string } {
-  const kind = kinds.find((each) => each in measure) ?? "level";
+  const kind = kinds.find((each) => each in measure);
+  if (kind === undefined) throw measureNameError("", kinds);
   return { kind, name: (measure as Readonly<Record<string, string>>)[kind] ?? "" };
 }
 
-/** Whether a measure needs many paths. */
+/** Whether a measure is a number between 0 and 1 that only chance makes. */
 export const isProbability = (measure: Measure): measure is Extract<Measure, { probability: string }> =>
   "probability" in measure;
 
-/** Units that a measure's words need. */
-export interface MeasureUnits {
-  readonly unitOf: (name: string) => string;
-  readonly periodUnit: string;
-  /** A time of the period column: "month 120", or a label where periods have them. */
-  readonly timeWords: (time: number) => string;
-}
+/** Whether a measure is of a level that is reached. */
+export const isOfLevel = (measure: Measure): measure is Measure & CrossedLevel =>
+  "share" in measure || "time" in measure || isProbability(measure);
 
-/** A measure in words: "the average of stock over the next 26 weeks". */
-export function measureWords(measure: Measure, units: MeasureUnits): string {
+/**
+ * Takes a measure apart.
+ *
+ * @param ahead - periods that the projection has.
+ * @throws {ModelError} `unknown-name` | `outside-projection` | `quantile-outside` | `level-not-finite` | `level-beyond-bounds`.
+ */
+export function placedMeasure(measure: Measure, rule: Rule, ahead: number): PlacedMeasure {
   const { kind, name } = measureOf(measure);
-  if ("level" in measure) return `${name} ${measure.at} ${plural(units.periodUnit, measure.at)} ahead`;
-  if (kind === "parameter") return name;
-  if ("time" in measure) return `the time at which ${reachWords(name, measure, units)}`;
-  if ("probability" in measure) return `the probability that ${reachWords(name, measure, units)}`;
-  return `the ${kind} of ${name}${windowWords(measure as Window, units)}`;
-}
-
-/** "owed falls to 0 EUR". */
-export function reachWords(name: string, level: CrossedLevel, { unitOf }: MeasureUnits): string {
-  const { value, sign } = levelSide(level);
-  return `${name} ${sign < 0 ? "falls" : "rises"} to ${amount(plain(value, 12), unitOf(name))}`;
-}
-
-function windowWords({ from, to }: Window, { periodUnit }: MeasureUnits): string {
-  if (from === undefined && to === undefined) return "";
-  if (to === undefined) return ` from ${periodUnit} ${from} ahead on`;
-  return ` over ${plural(periodUnit, 2)} ${from ?? 1} to ${to} ahead`;
-}
-
-/** "week" or "weeks". */
-export function plural(unit: string, count: number): string {
-  return count === 1 || unit.endsWith("s") ? unit : `${unit}s`;
-}
-
-/** A measure with its value, as the main clause of a sentence: "owed falls to 0 EUR at month 120". */
-export function measuredClause(measure: Measure, value: number, error: number, units: MeasureUnits): string {
-  const { kind, name } = measureOf(measure);
-  const said = measuredWords(measure, value, error, units);
-  if (kind === "time")
-    return `${reachWords(name, measure as Extract<Measure, { time: string }>, units)} at ${said}`;
-  return `${measureWords(measure, units)} is ${said}`;
-}
-
-/** A measure's value as a sentence writes it. */
-export function measuredWords(measure: Measure, value: number, error: number, units: MeasureUnits): string {
-  if (isProbability(measure)) return value === 0 ? "none in the draws made" : percent(value, error);
-  const { kind, name } = measureOf(measure);
-  if (kind === "time") return units.timeWords(value);
-  return amount(plain(value, 5), units.unitOf(name));
+  const place = kind === "parameter" ? rule.parameters.indexOf(name) : placeOf(rule, name);
+  if (place < 0) throw measureNameError(name, rule.parameters);
+  const { from = 1, to = ahead, quantile } = measure as Window & Quantile;
+  const [first, last] = "at" in measure ? [measure.at, measure.at] : [from, to];
+  const whole = Number.isInteger(first) && Number.isInteger(last);
+  if (!(whole && first >= 1 && last <= ahead && first <= last)) throw measureWindowError(first, last, ahead);
+  if (quantile !== undefined && !(quantile > 0 && quantile < 1)) throw quantileError(quantile);
+  if (isOfLevel(measure)) checkLevel(rule, name, measure);
+  return { kind, name, place, first, last, level: isOfLevel(measure) ? measure : undefined, quantile };
 }

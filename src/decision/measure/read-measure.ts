@@ -1,88 +1,75 @@
-import { centralPath, type Ground } from "../../projection/index.js";
-import { nonsmoothCalls, quantitiesAt } from "../../rule/index.js";
-import { crossing } from "../reach/crossing.js";
-import { refuseMeasureName, refuseMeasureWindow } from "../refusals.js";
-import type { Standing } from "../setting/standing.js";
-import { type Measure, measureOf } from "./measure.js";
+import { quantile } from "../../numeric/index.js";
+import { noChanceError } from "../errors.js";
+import type { DecisionContext } from "../setting/decision-context.js";
+import type { Choice } from "../setting/set-value.js";
+import { type Measure, type PlacedMeasure, placedMeasure } from "./measure.js";
+import { type PathReader, type PathValues, pathReader } from "./path-values.js";
 
-/** Reads a measure off the path without random change; NaN where the path does not have it. */
-export type MeasureReader = (ground: Ground) => number;
+/** A measure's value. */
+export interface Reading {
+  readonly value: number;
+  /** Monte-Carlo error; 0 where chance has no part. */
+  readonly error: number;
+  /** Share of the paths that ended outside the range of a state, without which the value is. */
+  readonly left: number;
+}
+
+/** Reads a measure, with a choice made or as things stand. */
+export interface MeasureReader {
+  readonly measure: PlacedMeasure;
+  /** Whether chance has a part, so that values carry a Monte-Carlo error. */
+  readonly simulated: boolean;
+  readonly read: (choice?: Choice) => Reading;
+  readonly paths: PathReader;
+}
 
 /**
- * A reader of a measure other than a probability. A time that is never reached within the projection is infinite.
+ * The reader of a measure that every decision uses: off the path without random change where nothing is random; else
+ * off many paths, as their mean, the share that gets there, or a quantile.
  *
- * @throws {ModelError} `unknown-name` | `outside-projection`.
+ * @throws {ModelError} `unknown-name` | `outside-projection` | `quantile-outside` | `nothing-random`.
  */
-export function measureReader(standing: Standing, measure: Measure): MeasureReader {
-  const { rule, present, ground } = standing;
-  const { kind, name } = measureOf(measure);
-  if (kind === "parameter") {
-    const place = rule.parameters.indexOf(name);
-    if (place < 0) throw refuseMeasureName(name, rule.parameters);
-    return (at) => at.parameters[place]!;
-  }
-  const column = columnReader(standing, name);
-  if ("time" in measure) return timeReader(standing, measure, column);
-  const [first, last] = windowOf(measure, ground.periods - present);
-  return (at) => {
-    const values = column(at).slice(present + first, present + last + 1);
-    return summaries[kind as keyof typeof summaries](values);
-  };
+export function measureReader(context: DecisionContext, asked: Measure): MeasureReader {
+  const measure = placedMeasure(asked, context.rule, context.ground.periods - context.ground.present);
+  const { kind, name } = measure;
+  if (kind === "probability" && context.fit === undefined && !context.random) throw noChanceError(name);
+  const drawn = context.fit !== undefined && (kind === "probability" || measure.quantile !== undefined);
+  const simulated = kind !== "parameter" && (context.random || drawn);
+  const paths = pathReader(context, measure, simulated ? "chance" : "estimates");
+  return { measure, simulated, paths, read: (choice) => readingOf(measure, paths(choice)) };
 }
 
-const summaries = {
-  level: (values: readonly number[]): number => values[0]!,
-  total: (values: readonly number[]): number => values.reduce((sum, value) => sum + value, 0),
-  average: (values: readonly number[]): number =>
-    values.reduce((sum, value) => sum + value, 0) / values.length,
-  lowest: (values: readonly number[]): number => Math.min(...values),
-  highest: (values: readonly number[]): number => Math.max(...values),
-};
-
-/** First and last period ahead of a measure's window, refused where the projection does not have them. */
-export function windowOf(measure: Measure, ahead: number): readonly [number, number] {
-  const window = measure as { readonly from?: number; readonly to?: number };
-  const [from, to] = "level" in measure ? [measure.at, measure.at] : [window.from ?? 1, window.to ?? ahead];
-  if (!(from >= 1 && to <= ahead && from <= to)) throw refuseMeasureWindow(from, to, ahead);
-  return [from, to];
+/** The mean over paths with its error; of a time the median, and a quantile where one is asked for. */
+export function readingOf({ kind, quantile: asked }: PlacedMeasure, found: PathValues): Reading {
+  const live = found.values.filter((value) => !Number.isNaN(value));
+  const { left } = found;
+  if (live.length <= 1) return { value: live[0] ?? Number.NaN, error: 0, left };
+  const probability = asked ?? (kind === "time" ? 0.5 : undefined);
+  if (probability !== undefined) return { ...quantileOf(live, probability), left };
+  const mean = live.reduce((sum, value) => sum + value, 0) / live.length;
+  if (kind === "probability")
+    return { value: mean, error: Math.sqrt((mean * (1 - mean)) / live.length), left };
+  const squares = live.reduce((sum, value) => sum + (value - mean) ** 2, 0);
+  return { value: mean, error: Math.sqrt(squares / (live.length - 1) / live.length), left };
 }
 
-/** Values of a state or of a quantity by row; a quantity's row is the period that it belongs to, NaN in row 0. */
-function columnReader(standing: Standing, name: string): (ground: Ground) => readonly number[] {
-  const { rule } = standing;
-  const state = rule.states.indexOf(name);
-  if (state >= 0)
-    return (ground) => {
-      standing.tick();
-      return centralPath(ground).values[state]!;
-    };
-  const place = rule.quantities.indexOf(name);
-  if (place < 0) throw refuseMeasureName(name, [...rule.states, ...rule.quantities]);
-  const quantities = quantitiesAt(rule);
-  return (ground) => {
-    standing.tick();
-    const { parameters, inputs, from } = ground;
-    const state = ground.initial.slice();
-    const values = [Number.NaN];
-    for (let t = 0; t < ground.periods; t++) {
-      values.push(quantities({ state, parameters, inputs, t: from + t })[place]!);
-      ground.compiled.step(state, parameters, inputs, from + t, state);
-    }
-    return values;
-  };
+/**
+ * A quantile, and its error by the order statistics that lie one binomial standard deviation to either side.
+ *
+ * @see David and Nagaraja (2003), Order Statistics, section 7.1, for the distribution-free interval (from memory).
+ */
+function quantileOf(values: Float64Array, probability: number): { value: number; error: number } {
+  const sorted = values.slice().sort();
+  const at = (p: number): number => infiniteSafe(sorted, Math.min(1, Math.max(0, p)));
+  const value = at(probability);
+  const half = Math.sqrt((probability * (1 - probability)) / sorted.length);
+  const [low, high] = [at(probability - half), at(probability + half)];
+  if (!Number.isFinite(value)) return { value, error: 0 };
+  return { value, error: Number.isFinite(high) ? (high - low) / 2 : value - low };
 }
 
-function timeReader(
-  standing: Standing,
-  measure: Extract<Measure, { time: string }>,
-  column: (ground: Ground) => readonly number[],
-): MeasureReader {
-  const { kinks, jumps } = nonsmoothCalls(standing.rule);
-  const smooth = standing.rule.inputs.length === 0 && kinks.length + jumps.length === 0;
-  return (ground) => {
-    const path = column(ground);
-    const at = crossing(path, 0, path.length, measure, smooth);
-    if (at === undefined) return Number.POSITIVE_INFINITY;
-    return standing.timeAt(smooth ? at.between : at.period);
-  };
+/** A quantile among which "never" stands as infinite: infinite as soon as it reaches those. */
+function infiniteSafe(sorted: Float64Array, probability: number): number {
+  const last = sorted[Math.ceil(probability * (sorted.length - 1))]!;
+  return Number.isFinite(last) ? quantile(sorted, probability) : last;
 }

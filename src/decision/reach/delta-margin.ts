@@ -1,6 +1,6 @@
 import { type Fit, problemOf } from "../../estimate/index.js";
 import { studentQuantile } from "../../numeric/index.js";
-import { type CentralPath, centralPath, type FitGround } from "../../projection/index.js";
+import type { FitGround } from "../../projection/index.js";
 
 /** An interval for a number read off the mean path, by the delta method. */
 export interface DeltaMargin {
@@ -19,18 +19,18 @@ export function deltaMargin(
   fit: Fit,
   ground: FitGround,
   level: number,
-  read: (path: CentralPath) => number | undefined,
+  read: (ground: FitGround) => number | undefined,
 ): DeltaMargin | undefined {
   const { group } = ground;
-  const centre = read(centralPath(ground));
+  const centre = read(ground);
   if (centre === undefined || !problemOf(fit).group(group.group).beginning().fromStart) return undefined;
   const slopes: number[] = [];
   for (let i = 0; i < group.estimates.length; i++) {
     const error = group.estimates[i]!.standardError;
     if (error === undefined) return undefined;
     const step = 1e-3 * error;
-    const up = read(centralPath(moved(ground, i, step)));
-    const down = read(centralPath(moved(ground, i, -step)));
+    const up = read(moved(ground, i, step));
+    const down = read(moved(ground, i, -step));
     if (up === undefined || down === undefined) return undefined;
     slopes.push((up - down) / (2 * step));
   }

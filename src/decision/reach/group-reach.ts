@@ -1,60 +1,80 @@
-import { type Fit, problemOf } from "../../estimate/index.js";
+import { problemOf } from "../../estimate/index.js";
 import { quantile } from "../../numeric/index.js";
 import {
+  centralLevels,
+  centralPath,
   type Forecast,
+  firstPassage,
   fitGround,
   type GroupForecast,
-  levelSide,
+  levelValues,
+  pastBy,
   type Simulation,
 } from "../../projection/index.js";
-import { plain } from "../words/amount.js";
-import { crossing } from "./crossing.js";
+import { periodWords } from "../../record/index.js";
 import { type DeltaMargin, deltaMargin } from "./delta-margin.js";
-import { drawnPassages } from "./drawn-passages.js";
+import {
+  counted,
+  distributionOf,
+  drawnPassages,
+  type GroupQuestion,
+  groupQuestion,
+  leftShare,
+  share,
+} from "./group-passages.js";
 import { levelling } from "./levelling.js";
 import type { GroupReach, ReachQuestion } from "./reach.js";
-import { timeWords } from "./time-words.js";
+import { likeliestWords, timeWords } from "./time-words.js";
 
 /** The answer for one group, but for its sentence. */
 export function groupReach(
   ahead: Forecast | Simulation,
   group: GroupForecast,
-  question: ReachQuestion,
-  smooth: boolean,
+  asked: ReachQuestion,
 ): Omit<GroupReach, "sentence"> {
-  const { level, state } = question;
+  const question = groupQuestion(ahead, group, asked);
+  const { level, present, from, place } = question;
+  const { paths, central: kept, levels } = group.ensemble;
   const length = group.index.length;
-  const place = group.states.findIndex((each) => each.state === state);
-  const found = drawnPassages(group, place, question, smooth);
-  const central = crossing(group.states[place]!.central, 0, length, question, smooth);
-  const recorded = ahead.kind === "forecast" ? recordedPast(ahead.fit, group, question) : undefined;
-  const beginsPast = central?.period === 0;
-  const rows = {
-    time: beginsPast ? undefined : central?.between,
-    firstPeriod: beginsPast ? undefined : central?.period,
-    lower: beginsPast ? undefined : limit(found, (1 - level) / 2),
-    upper: beginsPast ? undefined : limit(found, (1 + level) / 2),
-  };
-  const paths = found.length;
-  const never = found.filter((at) => at === Number.POSITIVE_INFINITY).length / paths;
+  const central = firstPassage(kept[place]!, 0, counted(question, levels.central, from), question.smooth);
+  const found = drawnPassages(group, question, from);
+  const coming = from === present ? found : drawnPassages(group, question, present);
+  const never = share(coming, (at) => at === Number.POSITIVE_INFINITY);
+  const beginsPast = central?.row === from && place < question.of.states.length;
+  const rows: Rows = beginsPast
+    ? { time: undefined, firstPeriod: undefined, lower: undefined, upper: undefined }
+    : {
+        time: central?.between,
+        firstPeriod: central?.row,
+        lower: limit(found, (1 - level) / 2),
+        upper: limit(found, (1 + level) / 2),
+      };
+  const distribution = beginsPast ? [] : distributionOf(found);
   return {
     group: group.group,
     scenario: group.scenario,
     time: timeOf(group, rows.time),
     firstPeriod: timeOf(group, rows.firstPeriod),
-    recorded: recorded?.time,
+    recorded: recordedPast(group, question)?.time,
     beginsPast,
+    withinRecord: rows.time !== undefined && rows.time <= present && present > 0,
+    levelAt: levelValues(asked, levels.central)[0]!,
     lower: timeOf(group, rows.lower),
     upper: timeOf(group, rows.upper),
     median: beginsPast ? undefined : timeOf(group, limit(found, 0.5)),
-    meanPath: beginsPast ? undefined : meanPath(ahead, group, question, smooth),
+    meanPath: beginsPast ? undefined : meanPath(group, question, ahead.options.periods),
     never,
     neverError: Math.sqrt((never * (1 - never)) / paths),
+    left: leftShare(group, place, coming),
     paths,
-    distribution: beginsPast ? [] : distributionOf(group, found),
+    distribution: distribution.map(({ row, ...each }) => ({ time: timeOf(group, row)!, ...each })),
     tendsTo: central === undefined ? levelling(group, place, level) : undefined,
     lastPeriod: group.time[length - 1]!,
-    words: { ...wordsOf(group, question, rows), recorded: recorded?.words },
+    words: {
+      ...wordsOf(group, question, rows),
+      likeliest: likeliestWords(group, question.periodUnit, distribution, rows.firstPeriod),
+      recorded: recordedPast(group, question)?.words,
+    },
   };
 }
 
@@ -69,7 +89,7 @@ function wordsOf(
   group: GroupForecast,
   { periodUnit }: ReachQuestion,
   rows: Rows,
-): Omit<GroupReach["words"], "recorded"> {
+): Omit<GroupReach["words"], "recorded" | "likeliest"> {
   const say = timeWords(group, periodUnit);
   const { time, firstPeriod, lower, upper } = rows;
   const spread = spreadOf(rows);
@@ -88,58 +108,39 @@ function spreadOf({ time, lower, upper }: Rows): number | undefined {
   return time === undefined || lower === undefined ? undefined : (time - lower) / 2;
 }
 
-/** When the record itself first shows the value passed; undefined where it does so from its first row on. */
+/** When the record itself first shows the level passed; undefined where it does so from its first row on. */
 function recordedPast(
-  fit: Fit,
   group: GroupForecast,
-  question: ReachQuestion,
+  question: GroupQuestion,
 ): { readonly time: number; readonly words: string } | undefined {
-  const { values, time, labels } = fit.observations.groups.find((each) => each.name === group.group)!;
-  const { state, periodUnit } = question;
-  const { value, sign } = levelSide(question);
-  const at = values[state]!.findIndex((each) => sign * (each - value) >= 0);
-  // A record that reads the state through an unknown factor is on another scale.
-  if (at <= 0 || problemOf(fit).readByFactor.includes(state)) return undefined;
-  return { time: time[at]!, words: labels?.[at] ?? `${periodUnit} ${plain(time[at]!, 6)}` };
+  const { fit, state } = question;
+  const recorded = fit?.observations.groups.find((each) => each.name === group.group);
+  const values = recorded?.values[state];
+  // A record that reads the state through a factor is on another scale.
+  if (recorded === undefined || values === undefined || problemOf(fit!).factors[state] !== undefined)
+    return undefined;
+  const { sign, levels } = counted(question, group.ensemble.levels.central, 0);
+  const at = values.findIndex((each) => pastBy(each, levels[0]!, sign) >= 0);
+  if (at <= 0) return undefined;
+  return { time: recorded.time[at]!, words: periodWords(recorded.axis, recorded.index[at]!) };
 }
 
-function meanPath(
-  ahead: Forecast | Simulation,
-  group: GroupForecast,
-  question: ReachQuestion,
-  smooth: boolean,
-): DeltaMargin | undefined {
-  if (ahead.kind === "simulation") return undefined;
-  const { fit, options } = ahead;
-  const fitted = fit.groups.find((each) => each.group === group.group)!;
-  const ground = fitGround(fit, fitted, options.periods, group.plans, group.recordEnd);
-  const place = fit.rule.states.indexOf(question.state);
-  return deltaMargin(fit, ground, question.level, ({ values }) => {
-    const path = values[place]!;
-    const at = crossing(path, 0, path.length, question, smooth);
+function meanPath(group: GroupForecast, question: GroupQuestion, periods: number): DeltaMargin | undefined {
+  const { fit, place, from, smooth } = question;
+  const fitted = fit?.groups.find((each) => each.group === group.group);
+  if (fit === undefined || fitted === undefined) return undefined;
+  const ground = fitGround(fit, fitted, periods, group.plans, group.recordEnd);
+  return deltaMargin(fit, ground, question.level, (own) => {
+    const asked = counted(question, centralLevels(own), from);
+    const at = firstPassage(centralPath(own).kept[place]!, 0, asked, smooth);
     return timeOf(group, at?.between);
   });
 }
 
-/** A quantile of crossings among which "never" stands as infinite; undefined where it falls among those. */
+/** A quantile of passages among which "never" stands as infinite; undefined where it falls among those. */
 function limit(found: Float64Array, probability: number): number | undefined {
-  const upper = found[Math.ceil((found.length - 1) * probability)]!;
-  return Number.isFinite(upper) ? quantile(found, probability) : undefined;
-}
-
-/** Shares of draws by the first whole period at or past the value. */
-function distributionOf(group: GroupForecast, found: Float64Array): GroupReach["distribution"] {
-  const counts = new Map<number, number>();
-  for (const at of found) {
-    if (!Number.isFinite(at)) break;
-    const period = Math.ceil(at);
-    counts.set(period, (counts.get(period) ?? 0) + 1);
-  }
-  let sum = 0;
-  return [...counts].map(([period, count]) => {
-    sum += count;
-    return { time: timeOf(group, period)!, share: count / found.length, by: sum / found.length };
-  });
+  const last = found[Math.ceil(probability * (found.length - 1))]!;
+  return Number.isFinite(last) ? quantile(found, probability) : undefined;
 }
 
 function timeOf(group: GroupForecast, at: number | undefined): number | undefined {

@@ -4,7 +4,7 @@ import type { DeltaMargin } from "./delta-margin.js";
 
 /** The question: when does a state rise or fall to a level? */
 export type TimeToReachOptions = CrossedLevel & {
-  /** Name of the state; default the only one. */
+  /** A state or quantity; default the first state. */
   readonly state?: string;
   /** Confidence level of the interval, between 0 and 1; default 0.95. */
   readonly level?: number;
@@ -24,10 +24,14 @@ export interface GroupReach {
   readonly time: number | undefined;
   /** First whole period at or past the value, on the path at the estimates. */
   readonly firstPeriod: number | undefined;
-  /** Where the record itself shows the value passed: the time of the first such row. */
+  /** Where the record itself shows the level passed: the time of the first such row. */
   readonly recorded: number | undefined;
-  /** Whether the path begins at or past the value: then there is no time at which it gets there. */
+  /** Whether the path begins at or past the level: then there is no time at which it gets there. */
   readonly beginsPast: boolean;
+  /** Whether the time lies within the record, because the fitted path stands at or past the level at its end. */
+  readonly withinRecord: boolean;
+  /** The level as a number, at the estimates. */
+  readonly levelAt: number;
   /** Across draws; a limit is undefined where that share of draws never gets there. */
   readonly lower: number | undefined;
   readonly upper: number | undefined;
@@ -35,9 +39,13 @@ export interface GroupReach {
   readonly median: number | undefined;
   /** For the mean path alone, by the delta method; where errors are those of readings and all is determined. */
   readonly meanPath: DeltaMargin | undefined;
-  /** Share of draws that never get there within the forecast, and its Monte-Carlo error. */
+  /**
+   * Share of paths that are never at or past the level from the present to the forecast's end, and its Monte-Carlo error.
+   */
   readonly never: number;
   readonly neverError: number;
+  /** Share of paths that ended outside the range of a state before they got there; part of `never`. */
+  readonly left: number;
   readonly paths: number;
   /** By period that some draw reaches first: its share of draws, and the share that is there by then. */
   readonly distribution: readonly { readonly time: number; readonly share: number; readonly by: number }[];
@@ -52,6 +60,8 @@ export interface GroupReach {
     readonly lower: string | undefined;
     readonly upper: string | undefined;
     readonly recorded: string | undefined;
+    /** The likeliest first periods with their chances, where more than one is likely: "month 36 (61%; month 35 39%)". */
+    readonly likeliest: string | undefined;
     readonly lastPeriod: string;
   };
   readonly sentence: string;

@@ -1,5 +1,5 @@
 import type { RandomStream } from "../../numeric/index.js";
-import type { ImaginedReadings } from "./imagined-readings.js";
+import type { SimulatedReadings } from "./simulated-readings.js";
 
 /** How much narrower an answer is expected to be after a reading. */
 export interface Narrowing {
@@ -9,18 +9,18 @@ export interface Narrowing {
   readonly error: number;
 }
 
-/** Imagined readings a candidate. */
-const imagined = 200;
+/** Simulated readings a candidate. */
+const simulated = 200;
 
 /**
- * Expected width of an answer's interval after a reading at a row, by weighing: each imagined reading, drawn from one draw of
- * the parameters, weighs all draws by how well they foretell it.
+ * Expected width of an answer's interval after a reading at a row, by reweighting: each simulated reading, drawn from one draw of
+ * the parameters, reweights all draws by its likelihood under each.
  *
  * @param answers - [draws]; on the log scale where all are positive and they spread over more than a factor of three.
  * @see Chaloner and Verdinelli (1995), Bayesian experimental design: a review, Statistical Science 10:273.
  */
 export function narrowingAt(
-  readings: ImaginedReadings,
+  readings: SimulatedReadings,
   answers: Float64Array,
   row: number,
   stream: RandomStream,
@@ -33,7 +33,7 @@ export function narrowingAt(
   const present = weightedWidth(answers, order, equal);
   const weights = new Float64Array(draws);
   const widths: number[] = [];
-  for (let j = 0; j < imagined; j++) {
+  for (let j = 0; j < simulated; j++) {
     const truth = Math.floor(stream.uniform() * draws);
     const value = centres[truth]![row]! + sd * stream.normal();
     if (!Number.isFinite(value)) continue;

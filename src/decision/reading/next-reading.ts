@@ -1,26 +1,24 @@
 import type { Fit } from "../../estimate/index.js";
 import { type RunHooks, randomStream, ticker } from "../../numeric/index.js";
+import { placeOf } from "../../projection/index.js";
 import type { PeriodAxis } from "../../record/index.js";
-import { isProbability, type Measure, measureWords } from "../measure/measure.js";
-import { measureReader } from "../measure/read-measure.js";
-import {
-  refuseNoCandidate,
-  refuseNoPurpose,
-  refuseProbabilityObjective,
-  refuseStateUnknown,
-} from "../refusals.js";
-import { percent, plain } from "../words/amount.js";
-import { type ImaginedReadings, imaginedReadings } from "./imagined-readings.js";
+import { noCandidateError, noPurposeError, probabilityAnswerError } from "../errors.js";
+import { isProbability, type Measure, placedMeasure } from "../measure/measure.js";
+import { measureWords } from "../measure/measure-words.js";
+import { pathReader } from "../measure/path-values.js";
+import { drawReader } from "../setting/setting-margin.js";
 import { narrowingAt } from "./narrowing.js";
+import { readingSentence } from "./reading-sentence.js";
 import { separationAt } from "./separation.js";
+import { type SimulatedReadings, simulatedReadings } from "./simulated-readings.js";
 
 /** Options of `nextReading`. */
 export interface NextReadingOptions extends RunHooks {
   /** Periods beyond the record up to which a reading could be taken, and up to which the answer looks. */
   readonly periods: number;
   /**
-   * Periods at which it could be taken, by number or label: a list, or two ends; default every period from
-   * the first on.
+   * Periods at which it could be taken, by number or label: a list, or two ends; default every period after the
+   * record. Periods within the record are looked at only where they are given here, as for samples that were kept.
    */
   readonly values?:
     | readonly (number | string)[]
@@ -34,7 +32,7 @@ export interface NextReadingOptions extends RunHooks {
   readonly answer?: Measure;
   /** What is read; default the first state. */
   readonly state?: string;
-  /** Readings taken at the same time; they count where the error is one of observation; default 1. */
+  /** Readings taken at the same time; default 1. They count where the error is one of observation. */
   readonly replicates?: number;
   /**
    * Cost of a reading at a time, in any unit; the gain is then weighed by it; default the same everywhere.
@@ -51,6 +49,10 @@ export interface NextReadingOptions extends RunHooks {
 /** What a reading at one time would bring. */
 export interface ReadingChoice {
   readonly time: number;
+  /** Whether the time lies within the record, where only a sample that was kept can still be read. */
+  readonly withinRecord: boolean;
+  /** Whether the reading comes after the event that the answer is the time of, too late to help before it. */
+  readonly tooLate: boolean;
   /** Share by which the answer's 80% interval is expected to narrow; or the expected evidence between rivals. */
   readonly gain: number;
   readonly error: number;
@@ -72,60 +74,81 @@ export interface NextReading {
   readonly zero: number;
   /** By time. */
   readonly choices: readonly ReadingChoice[];
+  /** The one that is worth most among those that do not come too late; of all where all do. */
   readonly recommended: ReadingChoice;
+  /** When the event comes that the answer is the time of, at the estimates; undefined for any other answer. */
+  readonly event: number | undefined;
   readonly sentence: string;
 }
 
 /**
  * When a further reading would help most: to narrow a named answer, or to tell rival rules apart.
  *
- * Parameters are drawn from each fit, a reading is imagined at each time from one of the draws, and the draws are
- * weighed by how well they foretell it. Nothing is refitted; the Monte-Carlo error is given with each gain.
+ * Parameters are drawn from each fit, a reading is simulated at each time from one of the draws, and the draws are
+ * reweighted by its likelihood under each. Nothing is refitted; the Monte-Carlo error is given with each gain. Readings after
+ * the record are looked at, those within it only where their times are given; where the answer is the time of an event,
+ * readings after it are marked as too late and not recommended.
  *
  * @param fits - one fit with `answer`, or several fits of the same record.
- * @throws {ModelError} `no-purpose` | `no-candidate` | `unknown-state` | `probability-not-smooth` | `future-input-missing`.
+ * @throws {ModelError} `no-purpose` | `no-candidate` | `unknown-name` | `probability-not-narrowed` | `future-input-missing`.
  * @example nextReading(fitted, { periods: 10, answer: { parameter: "K" } }).purpose // "narrow the answer"
  */
 export function nextReading(fits: Fit | readonly Fit[], options: NextReadingOptions): NextReading {
   const all = [fits].flat() as readonly Fit[];
   const [first] = all;
   const { answer, replicates = 1, seed = 1, paths: draws = 1000, periods, cost = () => 1 } = options;
-  if (first === undefined || (all.length === 1 && answer === undefined)) throw refuseNoPurpose();
-  if (answer !== undefined && isProbability(answer)) throw refuseProbabilityObjective();
+  if (first === undefined || (all.length === 1 && answer === undefined)) throw noPurposeError();
+  if (answer !== undefined && isProbability(answer)) throw probabilityAnswerError();
   const state = options.state ?? first.rule.states[0]!;
   const group = options.group === undefined ? {} : { group: options.group };
-  const rivals = all.map((fit) => {
-    const place = fit.rule.states.indexOf(state);
-    if (place < 0) throw refuseStateUnknown(state, fit.rule.states);
-    return imaginedReadings(fit, { periods, state: place, draws, replicates, seed, ...group });
-  });
-  const separating = answer === undefined;
-  const look = separating ? separationLook(rivals, seed) : narrowingLook(rivals[0]!, answer, seed);
+  const rivals = all.map((fit) =>
+    simulatedReadings(fit, { periods, state: placeOf(fit.rule, state), draws, replicates, seed, ...group }),
+  );
+  const { context } = rivals[0]!;
+  const look =
+    answer === undefined ? separationLook(rivals, seed) : narrowingLook(rivals[0]!, answer, draws, seed);
+  const event = eventTime(rivals[0]!, answer);
+  const end = context.timeAt(context.ground.present);
   const times = candidates(rivals, options.values);
   const tick = ticker(options, times.length);
   const choices = times.map(({ time, rows }): ReadingChoice => {
     tick();
     const { gain, error, telling } = look(rows);
     const price = cost(time);
-    return { time, gain, error, telling, cost: price, worth: gain / price };
+    const late = event !== undefined && time > event;
+    return {
+      time,
+      withinRecord: time <= end,
+      tooLate: late,
+      gain,
+      error,
+      telling,
+      cost: price,
+      worth: gain / price,
+    };
   });
-  const best = choices.reduce((top, next) => (next.worth > top.worth ? next : top));
-  const { standing } = rivals[0]!;
   const found = {
-    purpose: separating ? ("tell the rules apart" as const) : ("narrow the answer" as const),
+    purpose: answer === undefined ? ("tell the rules apart" as const) : ("narrow the answer" as const),
     state,
     replicates,
-    axis: standing.axis,
-    zero: standing.zero,
+    axis: context.axis,
+    zero: context.zero,
     choices,
-    recommended: best,
+    recommended: mostWorth(choices),
+    event,
   };
-  const about = separating ? "" : measureWords(answer, standing);
+  const about = answer === undefined ? "" : measureWords(answer, context);
   return {
     kind: "next-reading",
     ...found,
-    sentence: sentenceOf(found, standing.timeWords(best.time), about, rivals.length),
+    sentence: readingSentence(found, context.timeWords, about, rivals.length),
   };
+}
+
+/** The choice that is worth most; one that comes too late only where all do. */
+function mostWorth(choices: readonly ReadingChoice[]): ReadingChoice {
+  const timely = choices.filter(({ tooLate }) => !tooLate);
+  return (timely.length > 0 ? timely : choices).reduce((top, next) => (next.worth > top.worth ? next : top));
 }
 
 /** What a reading brings, by its row in every rival's path. */
@@ -135,16 +158,23 @@ type Look = (rows: readonly number[]) => {
   readonly telling: number | undefined;
 };
 
-function narrowingLook(readings: ImaginedReadings, answer: Measure, seed: number): Look {
-  const read = measureReader(readings.standing, answer);
-  const answers = levelled(Float64Array.from(readings.grounds, read));
+function narrowingLook(readings: SimulatedReadings, answer: Measure, draws: number, seed: number): Look {
+  const answers = levelled(drawReader(readings.context, answer, draws, true)());
   return ([row]) => {
     const { share, error } = narrowingAt(readings, answers, row!, randomStream(seed).jump());
     return { gain: 1 - share, error, telling: undefined };
   };
 }
 
-function separationLook(rivals: readonly ImaginedReadings[], seed: number): Look {
+/** The time of the event that an answer asks for, on the path at the estimates; undefined for any other answer. */
+function eventTime({ context }: SimulatedReadings, answer: Measure | undefined): number | undefined {
+  if (answer === undefined || !("time" in answer)) return undefined;
+  const { rule, ground } = context;
+  const measure = placedMeasure(answer, rule, ground.periods - ground.present);
+  return pathReader(context, measure, "estimates")().values[0]!;
+}
+
+function separationLook(rivals: readonly SimulatedReadings[], seed: number): Look {
   return (rows) => {
     const { evidence, error, telling } = separationAt(rivals, rows, randomStream(seed).jump());
     return { gain: evidence, error, telling };
@@ -163,46 +193,30 @@ function levelled(answers: Float64Array): Float64Array {
 
 /** Times with their rows in every rival's path, where all of them have one. */
 function candidates(
-  rivals: readonly ImaginedReadings[],
+  rivals: readonly SimulatedReadings[],
   when: NextReadingOptions["values"],
 ): readonly { readonly time: number; readonly rows: readonly number[] }[] {
-  const { standing } = rivals[0]!;
-  const process = rivals.some(({ standing: { change } }) => change.some((noise) => noise !== undefined));
-  const times = Array.from({ length: standing.ground.periods + 1 }, (_, row) => standing.timeAt(row));
+  const { context } = rivals[0]!;
+  const process = rivals.some((rival) => rival.context.random);
+  const times = Array.from({ length: context.ground.periods + 1 }, (_, row) => context.timeAt(row));
   const wanted = (time: number): boolean => {
-    if (when === undefined) return true;
+    if (when === undefined) return time > context.timeAt(context.ground.present);
     return "from" in when
-      ? time >= standing.timeOf(when.from) && time <= standing.timeOf(when.to)
-      : when.some((each) => Math.abs(standing.timeOf(each) - time) < 1e-9);
+      ? time >= context.timeOf(when.from) && time <= context.timeOf(when.to)
+      : when.some((each) => Math.abs(context.timeOf(each) - time) < 1e-9);
   };
   const found = times.filter(wanted).flatMap((time) => {
     const rows = rivals.map((rival) => rowAt(rival, time));
-    const ahead = rows.every((row, i) => row > rivals[i]!.standing.present);
+    const ahead = rows.every((row, i) => row > rivals[i]!.context.ground.present);
     return rows.every((row) => row >= 0) && (ahead || !process) ? [{ time, rows }] : [];
   });
   if (found.length === 0)
-    throw refuseNoCandidate(standing.timeWords(times[0]!), standing.timeWords(times[times.length - 1]!));
+    throw noCandidateError(context.timeWords(times[0]!), context.timeWords(times[times.length - 1]!));
   return found;
 }
 
-function rowAt({ standing }: ImaginedReadings, time: number): number {
-  for (let row = 0; row <= standing.ground.periods; row++)
-    if (Math.abs(standing.timeAt(row) - time) < 1e-9) return row;
+function rowAt({ context }: SimulatedReadings, time: number): number {
+  for (let row = 0; row <= context.ground.periods; row++)
+    if (Math.abs(context.timeAt(row) - time) < 1e-9) return row;
   return -1;
-}
-
-function sentenceOf(
-  found: Omit<NextReading, "kind" | "sentence">,
-  time: string,
-  about: string,
-  rules: number,
-): string {
-  const { recommended: best, replicates, state, purpose, choices } = found;
-  const what = replicates === 1 ? `A reading of ${state}` : `${replicates} readings of ${state}`;
-  const at = `at ${time}`;
-  const among = `of the ${choices.length} times looked at`;
-  const error = `Monte-Carlo error ${percent(best.error, best.error / 3)}`;
-  if (purpose === "narrow the answer")
-    return `${what} ${at} helps most ${among}: it is expected to narrow the margin of ${about} by ${percent(best.gain, best.error)} (${error}), if the rule holds.`;
-  return `${what} ${at} tells the ${rules} rules apart best ${among}: evidence of ${plain(best.gain, 2)} units is expected (Monte-Carlo error ${plain(best.error, 1)}), and ${percent(best.telling!, 0.01)} of such readings would favour the right rule by more than 2.`;
 }

@@ -1,32 +1,32 @@
 import type { RandomStream } from "../../numeric/index.js";
-import type { ImaginedReadings } from "./imagined-readings.js";
+import type { SimulatedReadings } from "./simulated-readings.js";
 
 /** How well a reading is expected to tell rival rules apart. */
 export interface Separation {
   /** Expected difference of twice the log likelihood between the rule that made the reading and its best rival. */
   readonly evidence: number;
   readonly error: number;
-  /** Share of imagined readings that favour their own rule by more than 2. */
+  /** Share of simulated readings that favour their own rule by more than 2. */
   readonly telling: number;
 }
 
-/** Imagined readings a candidate and rule. */
-const imagined = 300;
+/** Simulated readings a candidate and rule. */
+const simulated = 300;
 
 /**
- * Expected evidence of a reading at a row: it is imagined under each rule in turn, and its density under every rule is
+ * Expected evidence of a reading at a row: it is simulated under each rule in turn, and its density under every rule is
  * the mean over that rule's drawn parameters.
  *
  * @see Box and Hill (1967), Discrimination among mechanistic models, Technometrics 9:57.
  */
 export function separationAt(
-  rivals: readonly ImaginedReadings[],
+  rivals: readonly SimulatedReadings[],
   rows: readonly number[],
   stream: RandomStream,
 ): Separation {
   const found: number[] = [];
   rivals.forEach((own, r) => {
-    for (let j = 0; j < imagined; j++) {
+    for (let j = 0; j < simulated; j++) {
       const truth = Math.floor(stream.uniform() * own.centres.length);
       const scaled = own.centres[truth]![rows[r]!]! + own.scatter[rows[r]!]! * stream.normal();
       const value = own.scale.from(scaled);
@@ -46,7 +46,7 @@ export function separationAt(
 }
 
 /** Log density of a value on the record's scale. */
-function logDensity({ centres, scatter, scale }: ImaginedReadings, row: number, value: number): number {
+function logDensity({ centres, scatter, scale }: SimulatedReadings, row: number, value: number): number {
   if (scale.log && value <= 0) return Number.NEGATIVE_INFINITY;
   const scaled = scale.to(value);
   const sd = scatter[row]!;

@@ -23,6 +23,16 @@ export function rounded(value: number, uncertainty?: number): string {
   return plain(Math.round(value / unit) * unit, 15);
 }
 
+/** To no more digits than a Monte-Carlo error allows; to so many significant ones where there is none. */
+export function withinError(value: number, error: number, digits: number): string {
+  if (!(error > 0)) return plain(value, digits);
+  const decimals = decimalsFor(error) - 1;
+  const unit = 10 ** -Math.max(-15, Math.min(15, decimals));
+  // Not -0, which toFixed writes with its sign.
+  const whole = Math.round(value / unit) * unit + 0;
+  return decimals > 0 ? whole.toFixed(Math.min(decimals, 12)).replace(/^-(0\.?0*)$/, "$1") : plain(whole, 15);
+}
+
 /** Decimals at which an uncertainty has its second digit; negative before the decimal sign. */
 function decimalsFor(uncertainty: number): number {
   return 1 - Math.floor(Math.log10(uncertainty));
@@ -36,12 +46,12 @@ export function plain(value: number, digits: number): string {
     : `${short}`;
 }
 
-/** A share of draws in words: "in fewer than 1 in 1000 draws", "in about 3% of draws", "in every draw". */
-export function shareOfDraws(share: number, error: number, draws: number): string {
-  if (share === 0) return `in fewer than 1 in ${plain(Math.floor(draws / 3), 1)} draws`;
-  if (share === 1) return "in every draw";
-  if (share < 0.001) return "in fewer than 1 in 1000 draws";
-  return `in about ${percent(share, error)} of draws`;
+/** A share of paths in words: "in fewer than 1 in 1000 paths", "in about 3% of paths", "on every path". */
+export function shareOfPaths(share: number, error: number, paths: number): string {
+  if (share === 0) return `in fewer than 1 in ${plain(Math.floor(paths / 3), 1)} paths`;
+  if (share === 1) return "on every path";
+  if (share < 0.001) return "in fewer than 1 in 1000 paths";
+  return `in about ${percent(share, error)} of paths`;
 }
 
 /** A share as a percentage, to no more digits than its Monte-Carlo error allows. */
@@ -57,6 +67,6 @@ export function opened(words: string): string {
 }
 
 /** A level as a percentage: 0.95 -> "95%". */
-export function levelWords(level: number): string {
+export function percentWords(level: number): string {
   return `${Number((100 * level).toPrecision(12))}%`;
 }

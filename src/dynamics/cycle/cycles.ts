@@ -33,10 +33,7 @@ export interface Cycles {
 export interface CyclesOptions extends HeldSetting {
   /** Periods until the values come round. */
   readonly period: number;
-  /**
-   * Lowest and highest value to look at, for a system by state; default the rule's bounds, else a million
-   * times the largest parameter either way.
-   */
+  /** Default: the rule's bounds, or as far as its parameters and its turns from rising to falling suggest. */
   readonly range?: SearchRange;
 }
 
@@ -72,7 +69,7 @@ export function cycles(rule: Rule, options: CyclesOptions): Cycles {
     throw unreadableOption("period", "a whole number from 1 to 64", period);
   }
   const held = holdStep(rule, options, "cycle");
-  const within = searchRanges(rule, held.parameters, options.range)[0]!;
+  const within = searchRanges(held, options.range)[0]!;
   const found = cyclesOfOneState(held, period, within);
   return {
     kind: "cycles",

@@ -21,15 +21,15 @@ const patience = 200_000;
 const hasZero = ([low, high]: Interval): boolean => !(low > 0 || high < 0 || Number.isNaN(low));
 
 /** Narrower intervals are not divided: the ends are as close as the function's own rounding allows. */
-const narrow = ([low, high]: Interval, scale: number): boolean =>
-  high - low <= 1e-9 * Math.max(Math.abs(low), Math.abs(high), 1e-6 * scale);
+const narrow = ([low, high]: Interval): boolean =>
+  high - low <= 1e-9 * Math.max(Math.abs(low), Math.abs(high), 1e-250);
 
 /** Midpoint that halves small and large numbers alike, so that a wide range costs no more than its digits. */
 function middleOf([low, high]: Interval): number {
   if (low < 0 && high > 0) return 0;
   const [near, far] = [Math.min(Math.abs(low), Math.abs(high)), Math.max(Math.abs(low), Math.abs(high))];
   const even = (low + high) / 2;
-  if (far <= 4 * near || far < 1e-3) return even;
+  if (far <= 4 * near) return even;
   return Math.sign(even) * (near === 0 ? far * 1e-3 : Math.sqrt(near) * Math.sqrt(far));
 }
 
@@ -44,10 +44,10 @@ function centered(enclose: Problem["enclose"], [low, high]: Interval, slope: Int
 
 type Judgement = "empty" | "one-crossing" | "undecided" | "divide";
 
-function judge({ of, enclose }: Problem, piece: Interval, scale: number): Judgement {
+function judge({ of, enclose }: Problem, piece: Interval): Judgement {
   const { value, slope } = enclose(piece);
   if (!hasZero(value) || !hasZero(centered(enclose, piece, slope))) return "empty";
-  if (Number.isNaN(slope[0]) || hasZero(slope)) return narrow(piece, scale) ? "undecided" : "divide";
+  if (Number.isNaN(slope[0]) || hasZero(slope)) return narrow(piece) ? "undecided" : "divide";
   return Math.sign(of(piece[0])) * Math.sign(of(piece[1])) <= 0 ? "one-crossing" : "empty";
 }
 
@@ -63,12 +63,11 @@ function divide(problem: Problem): Division {
   const { within } = problem;
   const crossings: Interval[] = [];
   const undecided: Interval[] = [];
-  const scale = Math.max(Math.abs(within[0]), Math.abs(within[1]));
   const pending: Interval[] = [within];
   for (let looked = 0; pending.length > 0; looked++) {
     if (looked > patience) return { crossings, undecided, complete: false };
     const piece = pending.pop()!;
-    const judgement = judge(problem, piece, scale);
+    const judgement = judge(problem, piece);
     if (judgement === "one-crossing") crossings.push(piece);
     if (judgement === "undecided") undecided.push(piece);
     if (judgement !== "divide") continue;
@@ -117,7 +116,7 @@ function decide(problem: Problem, piece: Interval): number | undefined {
     return Math.abs(of(at)) <= 1e-6 * Math.abs(at) ? at : undefined;
   }
   // A jump may land on zero without a change of sign; jumps mostly stand at numbers that print short.
-  const places = [levelPlace(problem, piece), Number(((low + high) / 2).toPrecision(9))];
+  const places = [levelPlace(problem, piece), Number(((low + high) / 2).toPrecision(9)), low, high];
   return places.find((at) => Math.abs(of(at)) <= noise(at));
 }
 

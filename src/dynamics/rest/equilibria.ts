@@ -38,10 +38,7 @@ export interface Equilibria {
 }
 
 export interface EquilibriaOptions extends HeldSetting {
-  /**
-   * Lowest and highest value to look at, for a system by state; default the rule's bounds, else a million
-   * times the largest parameter either way.
-   */
+  /** Default: the rule's bounds, or as far as its parameters and its turns from rising to falling suggest. */
   readonly range?: SearchRange;
   /** For systems: how many places the search starts from; default 400. */
   readonly searches?: number;
@@ -99,15 +96,33 @@ function ofOneState(held: HeldStep, within: Interval): Found {
   return { points, search: complete ? "every" : "cut-short" };
 }
 
-const apart = (a: Float64Array, b: Float64Array): boolean =>
-  a.some((value, i) => Math.abs(value - b[i]!) > 1e-8 * Math.max(Math.abs(value), Math.abs(b[i]!), 1e-12));
+const largest = (values: Float64Array): number =>
+  values.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
+
+function apart(a: Float64Array, b: Float64Array): boolean {
+  const least = 1e-4 * Math.max(largest(a), largest(b));
+  return a.some(
+    (value, i) => Math.abs(value - b[i]!) > 1e-8 * Math.max(Math.abs(value), Math.abs(b[i]!), least),
+  );
+}
+
+/** The point with 0 for values that differ from it by rounding only, where the rule leaves that as it is too. */
+function withoutRounding(held: HeldStep, point: Float64Array): Float64Array {
+  const size = largest(point);
+  const rounded = point.map((value) => (Math.abs(value) < 1e-15 * size ? 0 : value));
+  const next = new Float64Array(held.width);
+  held.step(settled(held.rule, rounded), next);
+  return rounded.every((value, i) => Math.abs(next[i]! - value) <= 1e-12 * size) ? rounded : point;
+}
 
 function ofSystem(held: HeldStep, within: readonly Interval[], starts: number): Found {
   const found: Float64Array[] = [];
   for (const start of spreadPoints(within, starts)) {
-    const point = settleByNewton(held, start);
-    const inside = point?.every((value, i) => value >= within[i]![0] && value <= within[i]![1]);
-    if (point !== undefined && inside && found.every((other) => apart(point, other))) found.push(point);
+    const settledAt = settleByNewton(held, start);
+    if (settledAt === undefined) continue;
+    const point = withoutRounding(held, settledAt);
+    const inside = point.every((value, i) => value >= within[i]![0] && value <= within[i]![1]);
+    if (inside && found.every((other) => apart(point, other))) found.push(point);
   }
   return { points: found.sort((a, b) => a[0]! - b[0]! || a[1]! - b[1]!), search: "many-starts" };
 }
@@ -125,7 +140,7 @@ function ofSystem(held: HeldStep, within: readonly Interval[], starts: number): 
  */
 export function equilibria(rule: Rule, options: EquilibriaOptions = {}): Equilibria {
   const held = holdStep(rule, options, "equilibrium");
-  const ranges = searchRanges(rule, held.parameters, options.range);
+  const ranges = searchRanges(held, options.range);
   const single = rule.states.length === 1;
   const starts = single ? 0 : (options.searches ?? 400);
   const found = single ? ofOneState(held, ranges[0]!) : ofSystem(held, ranges, starts);

@@ -8,12 +8,14 @@ function generators(size: number): readonly number[] {
   return Array.from({ length: size }, (_, i) => root ** -(i + 1));
 }
 
-/** Maps 0..1 onto a range: evenly where it is narrow, by powers of ten from zero where it is wide. */
+/** Maps 0..1 onto a range: evenly where it is narrow, by powers of ten from near zero where it is wide. */
 function placed(part: number, [low, high]: Interval): number {
   if (!(high - low > 1e3)) return low + part * (high - low);
-  const up = Math.asinh(high);
-  const down = Math.asinh(low);
-  return Math.sinh(down + part * (up - down));
+  // A range of a million times a size reaches down to a thousandth of that size's reciprocal.
+  const unit = 1e3 / Math.max(Math.abs(low), Math.abs(high));
+  const up = Math.asinh(high / unit);
+  const down = Math.asinh(low / unit);
+  return unit * Math.sinh(down + part * (up - down));
 }
 
 /** Places spread over a box without a pattern that a rule could fall in with; always the same ones. */

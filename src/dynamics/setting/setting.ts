@@ -1,5 +1,5 @@
 import type { Rule } from "../../rule/index.js";
-import { missingValue, notFinite, strangeName, wrongHistory } from "../refusals.js";
+import { beyondBounds, missingValue, notFinite, strangeName, wrongHistory } from "../refusals.js";
 
 /** By state: its first value, or its first values oldest first where the rule reads past ones. */
 export type InitialValues = Readonly<Record<string, number | readonly number[]>>;
@@ -34,7 +34,11 @@ function firstValues(rule: Rule, state: string, given: InitialValues): readonly 
   const value = given[state]!;
   const values = typeof value === "number" ? [value] : value;
   if (values.length !== lags + 1) throw wrongHistory(state, lags + 1, values.length);
-  for (const one of values) if (!Number.isFinite(one)) throw notFinite("initial value of", state, one);
+  const [low, high] = rule.bounds[state] ?? [Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY];
+  for (const one of values) {
+    if (!Number.isFinite(one)) throw notFinite("initial value of", state, one);
+    if (one < low || one > high) throw beyondBounds(state, one, low, high);
+  }
   return values;
 }
 

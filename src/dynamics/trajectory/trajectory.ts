@@ -5,12 +5,14 @@ import {
   quantitiesAt,
   type Rule,
   type StepArguments,
+  stateBounds,
 } from "../../rule/index.js";
 import type { InputPlans } from "../inputs/input-plan.js";
 import { initialFrom, inputsFrom, runStart, type StartOptions } from "../inputs/run-start.js";
 import { unreadableOption } from "../refusals.js";
 import { type InitialValues, initialVector, parametersBySlot } from "../setting/setting.js";
 import { namedValues, refuseOutsideRange } from "../setting/valid-range.js";
+import { type BoundedPath, boundedPath, type PathRun } from "./bounded-path.js";
 
 export interface TrajectoryOptions extends StartOptions {
   /**
@@ -53,23 +55,27 @@ export interface Trajectory {
   /** By quantity: [periods + 1]; the value inside the period that ends at that row, NaN in row 0. */
   readonly quantities: Readonly<Record<string, Float64Array>>;
   readonly stop: TrajectoryStop;
+  /** States that passed a bound and have stayed there since. */
+  readonly absorbed: readonly Absorption[];
 }
 
-/** Everything a run needs, by slot. */
-interface Run {
+/** A state that passed a bound, in this absolute period, and has stayed there since. */
+export interface Absorption {
+  readonly state: string;
+  readonly period: number;
+  readonly bound: number;
+}
+
+/** A run with its path, by slot. */
+interface Run extends PathRun {
   readonly rule: Rule;
-  readonly parameters: Float64Array;
-  readonly inputs: readonly Float64Array[];
-  readonly from: number;
   readonly axis: PeriodAxis;
   readonly width: number;
-  /** [periods + 1, width] */
-  readonly table: Float64Array;
+  readonly path: BoundedPath;
 }
 
-function placeAt(run: Run, row: number): StepArguments {
-  const state = run.table.subarray(row * run.width, (row + 1) * run.width);
-  return { state, parameters: run.parameters, inputs: run.inputs, t: run.from + row };
+function placeAt({ path, width, parameters, inputs, from }: Run, row: number): StepArguments {
+  return { state: path.table.subarray(row * width, (row + 1) * width), parameters, inputs, t: from + row };
 }
 
 interface End {
@@ -77,39 +83,33 @@ interface End {
   readonly stop: TrajectoryStop;
 }
 
-/** Where a value first leaves the finite range, if it does; the path ends one row before. */
-function leavesFinite(run: Run): End | undefined {
-  const bad = run.table.findIndex((value) => !Number.isFinite(value));
-  if (bad < 0) return undefined;
-  const rows = Math.floor(bad / run.width);
-  const period = run.from + rows;
-  const failure = explainFailure(run.rule, placeAt(run, rows - 1));
-  const cause = failure === undefined ? "" : `: ${failure.reason}`;
-  const reason = `The rule leaves the finite range at ${periodWords(run.axis, period)}${cause}.`;
-  return { rows, stop: { kind: "left-finite-range", period, reason } };
-}
-
-/** Where a state first leaves its bounds among the first rows, if it does; the path ends with that row. */
-function leavesBounds(run: Run, rows: number): End | undefined {
-  const bounded = run.rule.states.flatMap((name, slot) => {
-    const range = run.rule.bounds[name];
-    return range === undefined ? [] : [{ name, slot, range }];
-  });
-  for (let row = 1; row < rows && bounded.length > 0; row++) {
-    for (const { name, slot, range } of bounded) {
-      const value = run.table[row * run.width + slot]!;
-      if (value >= range[0] && value <= range[1]) continue;
-      const period = run.from + row;
-      const reason = `${name} leaves its bounds ${range[0]} to ${range[1]} at ${periodWords(run.axis, period)}, with ${value}; further values would mean nothing.`;
-      return { rows: row + 1, stop: { kind: "left-bounds", period, reason } };
-    }
+/** Where a value leaves the finite range the path ends one row before; where it leaves its bounds, with that row. */
+function endOf(run: Run): End {
+  const { rule, path, from, width, periods } = run;
+  const end = path.reached.find(({ absorbed }) => !absorbed);
+  if (end === undefined) return { rows: periods + 1, stop: { kind: "complete" } };
+  const { row, state, value } = end;
+  const period = from + row;
+  if (!Number.isFinite(value)) {
+    const failure = row === 0 ? undefined : explainFailure(rule, placeAt(run, row - 1));
+    const cause = failure === undefined ? "" : `: ${failure.reason}`;
+    const reason = `The rule leaves the finite range at ${periodWords(run.axis, period)}${cause}.`;
+    return { rows: row, stop: { kind: "left-finite-range", period, reason } };
   }
-  return undefined;
+  path.table[row * width + state] = value;
+  const name = rule.states[state]!;
+  const [low, high] = rule.bounds[name]!;
+  const reason = `${name} leaves its bounds ${low} to ${high} at ${periodWords(run.axis, period)}, with ${value}; further values would mean nothing.`;
+  return { rows: row + 1, stop: { kind: "left-bounds", period, reason } };
 }
 
-function stopOf(run: Run, periods: number): End {
-  const end = leavesFinite(run) ?? { rows: periods + 1, stop: { kind: "complete" } };
-  return leavesBounds(run, end.rows) ?? end;
+function absorptionsOf({ rule, path, from, width }: Run): readonly Absorption[] {
+  const found = path.reached.filter(({ absorbed }) => absorbed);
+  return found.map(({ row, state }) => ({
+    state: rule.states[state]!,
+    period: from + row,
+    bound: path.table[row * width + state]!,
+  }));
 }
 
 function quantityColumns(run: Run, rows: number): Readonly<Record<string, Float64Array>> {
@@ -129,7 +129,8 @@ function quantityColumns(run: Run, rows: number): Readonly<Record<string, Float6
  *
  * @param rule - any rule; one with lags needs as many first values as it reads, oldest first.
  * @param options.periods - steps to take, a whole number from 0.
- * @returns the values by state [periods + 1], and why the path ends; it stops before a value that is not finite.
+ * @returns the values by state [periods + 1], and why the path ends: it stops before a value that is not finite, and
+ *   with one beyond a bound that does not absorb.
  * @throws {ModelError} `missing-value` | `unknown-name` | `wrong-history` | `missing-input` | `future-input-missing` |
  *   `plan-not-readable` | `start-not-readable` | `unreadable-option`.
  * @example trajectory(recurrence("N[t+1] = R*N"), { parameters: { R: 2 }, initial: { N: 3 }, periods: 2 }).values.N; // 3, 6, 12
@@ -145,13 +146,12 @@ export function trajectory(rule: Rule, options: TrajectoryOptions): Trajectory {
   const initial = initialVector(rule, initialFrom(rule, start, options.initial));
   refuseOutsideRange(rule, namedValues(rule, parameters, initial));
   const inputs = inputsFrom(rule, start, periods, options.inputs ?? {});
-  const width = initial.length;
-  const table = new Float64Array((periods + 1) * width);
-  compileRule(rule).path(initial, parameters, inputs, from, periods, table);
-  const run: Run = { rule, parameters, inputs, from, axis, width, table };
-  const { rows, stop } = stopOf(run, periods);
+  const own = { initial, parameters, inputs, from, periods };
+  const path = boundedPath(compileRule(rule), stateBounds(rule), own);
+  const run: Run = { ...own, rule, axis, width: initial.length, path };
+  const { rows, stop } = endOf(run);
   const column = (slot: number): Float64Array =>
-    Float64Array.from({ length: rows }, (_, row) => table[row * width + slot]!);
+    Float64Array.from({ length: rows }, (_, row) => path.table[row * run.width + slot]!);
   return {
     kind: "trajectory",
     rule,
@@ -162,5 +162,6 @@ export function trajectory(rule: Rule, options: TrajectoryOptions): Trajectory {
     values: Object.fromEntries(rule.states.map((name, slot) => [name, column(slot)])),
     quantities: quantityColumns(run, rows),
     stop,
+    absorbed: absorptionsOf(run),
   };
 }

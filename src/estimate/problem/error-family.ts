@@ -139,11 +139,27 @@ function logNegativeBinomial(count: number, mean: number, censoring: number, dis
   // P(Y >= y) from its own side, which keeps its digits where it is small.
   if (censoring > 0) return count === 0 ? 0 : Math.log(fCdf(mean / count, 2 * count, 2 / dispersion));
   const size = 1 / dispersion;
-  // The first two terms as a sum of logarithms where that is exact and cheap: they cancel for a large size.
-  let rising = 0;
-  if (count <= 1000) for (let k = 0; k < count; k++) rising += Math.log1p(k * dispersion);
-  else rising = logGamma(count + size) - logGamma(size) - count * Math.log(size);
+  const spreadOut = logRising(count, size);
   return (
-    rising - logGamma(count + 1) + count * Math.log(mean) - (count + size) * Math.log1p(mean * dispersion)
+    spreadOut - logGamma(count + 1) + count * Math.log(mean) - (count + size) * Math.log1p(mean * dispersion)
   );
+}
+
+/**
+ * ln of the product of 1 + k/size for k from 0 to count - 1: a difference of two logarithms of the gamma function, which
+ * cancel for a large size. Stirling's series of that difference keeps its digits there.
+ */
+function logRising(count: number, size: number): number {
+  if (count <= 12) {
+    let sum = 0;
+    for (let k = 1; k < count; k++) sum += Math.log1p(k / size);
+    return sum;
+  }
+  if (size < 20) return logGamma(count + size) - logGamma(size) - count * Math.log(size);
+  const end = size + count;
+  const correction = (one: number): number => {
+    const s = 1 / (one * one);
+    return (1 / 12 - s * (1 / 360 - s * (1 / 1260 - s / 1680))) / one;
+  };
+  return (end - 0.5) * Math.log1p(count / size) - count + correction(end) - correction(size);
 }

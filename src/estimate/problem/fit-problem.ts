@@ -35,8 +35,8 @@ export interface FitProblem {
   readonly groups: "separate" | "combined" | "mixed";
   /** Of the intervals. */
   readonly level: number;
-  /** States that the record reads only up to an unknown factor. */
-  readonly readByFactor: readonly string[];
+  /** By state that the record reads only up to an unknown factor: the name of the factor. */
+  readonly factors: Readonly<Record<string, string>>;
   /** What the fit was made with, in words. */
   readonly aspects: FitAspects;
   /** Lowest and highest admitted value of a parameter or initial state. */
@@ -72,7 +72,7 @@ export function fitProblem(
     groups: together,
     level: options.level ?? 0.95,
     around: aroundOf(errorFamily(options), scaleOf(options)),
-    readByFactor: Object.keys(options.factor ?? {}),
+    factors: options.factor ?? {},
     aspects: aspectsOf(rule, options),
     bounds: (name) => options.bounds?.[name] ?? rule.bounds[name] ?? open,
     group(name) {

@@ -27,11 +27,16 @@ export interface GroupProblem {
   readonly findsSigma: boolean;
   /** Where the trajectory begins that leads on after a period; by default after the last one recorded. */
   readonly beginning: (after?: number) => Beginning;
-  /** The residuals that the error distribution calls for when they are tested: `raw`, or `quantile` of counts and limits. */
+  /** The residuals to be tested: `raw`, `quantile` of counts and limits, `pearson` of a filter's predictions. */
   readonly tested: ResidualKind;
   readonly residuals: (kind: ResidualKind, stream: RandomStream) => Float64Array;
   /** The fit with one unknown held, from where another one ended; undefined where the rule cannot be run there. */
   readonly hold: (name: string, value: number, from?: Held) => Held | undefined;
+  /**
+   * Increase of the objective over the optimum at unknowns as they are reported, in units of the profile: sigma^2, or
+   * twice the log-likelihood; infinite where the rule cannot be run. Undefined where groups are fitted together.
+   */
+  readonly increase: ((estimates: Float64Array) => number) | undefined;
   /** The fit made ready to be done again, given other values; undefined where groups are fitted together. */
   readonly refitter: () => Refitter | undefined;
 }
@@ -53,6 +58,7 @@ export function groupProblem(
   };
   // Made when first asked for: a forecast needs none. It is never given other values.
   let kept: Search | undefined;
+  let best: number | undefined;
   const search = (): Search => {
     kept ??= fresh();
     return kept;
@@ -70,7 +76,7 @@ export function groupProblem(
     findsSigma: kind !== "state-space" && !counts && options.sd === undefined,
     beginning: (after = recorded.index[recorded.index.length - 1]!) =>
       beginningOf(rule, recorded, fitted, options, scaleOf(options), after),
-    tested: kind === "likelihood" ? "quantile" : "raw",
+    tested: ({ "least-squares": "raw", likelihood: "quantile", "state-space": "pearson" } as const)[kind],
     residuals(wanted, stream) {
       if (together) return Float64Array.from(fitted.points, ({ residual }) => residual);
       const at = estimatesIn(search().unknowns, fitted);
@@ -89,6 +95,17 @@ export function groupProblem(
       const i = search().unknowns.names.indexOf(name);
       return i < 0 ? undefined : heldAt(search(), search().objective.value(at), i, value, from?.at ?? at);
     },
+    increase: together
+      ? undefined
+      : (estimates) => {
+          const { objective, unknowns, cutAt } = search();
+          best ??= objective.value(estimatesIn(unknowns, fitted));
+          const value = objective.value(
+            estimates.map((each, i) => (unknowns.rooted[i] ? each * each : each)),
+          );
+          const increase = (value - best) / cutAt(best).variance;
+          return Number.isNaN(increase) ? Number.POSITIVE_INFINITY : Math.max(0, increase);
+        },
     refitter() {
       if (together) return undefined;
       const again = fresh();

@@ -77,8 +77,8 @@ export function likelihoodSearch(rule: Rule, group: ObservedGroup, options: FitO
 }
 
 /** Trial points that are looked at beside the ends of least-squares searches, and starts that are tried of all. */
-const trials = 200;
-const kept = 12;
+const trials = 150;
+const kept = 10;
 
 /** A count has no likelihood on a trajectory of 0: a start there is begun at half a count, and at one. */
 function liftedStarts(at: Float64Array, { roles }: Unknowns): readonly Float64Array[] {

@@ -83,7 +83,7 @@ export function check(fit: Fit, options: CheckOptions = {}): Check {
 function groupCheck(fit: Fit, group: GroupFit, refits: number, stream: RandomStream, tick: Tick): GroupCheck {
   const found = {
     group: group.group,
-    tests: residualTests(fit, group),
+    tests: residualTests(fit, group, stream.jump()),
     windows: windows(fit, group),
     lackOfFit: lackOfFit(fit, group),
     recovery: recovery(fit, group, refits, stream, tick),

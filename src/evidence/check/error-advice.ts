@@ -142,7 +142,12 @@ function kindOf(weight: number): ErrorAdvice["kind"] {
 }
 
 function lagOneOf({ fit, group }: Side): number {
-  return autocorrelations(residualSeries(group, fit.rule.states[0]!), 1)[0]!;
+  const own = group.points.filter(({ state }) => state === fit.rule.states[0]!);
+  const series = residualSeries(
+    own.map(({ index }) => index),
+    own.map(({ residual }) => residual),
+  );
+  return autocorrelations(series, 1)[0]!;
 }
 
 function sentenceOf(advice: Omit<ErrorAdvice, "sentence">, neither: boolean, count: number): string {

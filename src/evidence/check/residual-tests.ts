@@ -1,4 +1,5 @@
-import { type Fit, type GroupFit, problemOf } from "../../estimate/index.js";
+import { type Fit, type FitProblem, type GroupFit, problemOf } from "../../estimate/index.js";
+import type { RandomStream } from "../../numeric/index.js";
 import { autocorrelations } from "../statistics/autocorrelation.js";
 import { durbinWatson } from "../statistics/durbin-watson.js";
 import { boxPierce, ljungBox } from "../statistics/portmanteau.js";
@@ -7,14 +8,18 @@ import { shapiroWilk } from "../statistics/shapiro-wilk.js";
 import { spreadTest } from "../statistics/spread-test.js";
 import { residualSeries } from "./residual-series.js";
 
+/** What a residual test looks for. */
+export type ResidualTestKind = "autocorrelation" | "normality" | "distribution" | "spread";
+
 /** One look at the residuals of one state. */
 export interface ResidualTest {
   readonly state: string;
+  readonly kind: ResidualTestKind;
   readonly name: string;
   /** What it asks. */
   readonly question: string;
   readonly statistic: number;
-  /** Of a value as far out if the residuals were independent, even and normal; undefined where none is computed. */
+  /** Of a value as far out if the fit were right; undefined where none is computed. */
   readonly probability: number | undefined;
   /** From the probability, or from the limit where there is one. */
   readonly sign: "none" | "weak" | "clear";
@@ -25,73 +30,114 @@ export interface ResidualTest {
 const weak = 0.05;
 const clear = 0.01;
 
+const questions: Readonly<Record<ResidualTestKind, string>> = {
+  autocorrelation: "Autocorrelation: do neighbouring residuals move together?",
+  normality: "Normality: are the residuals normal?",
+  distribution: "Distribution: do the values follow the one that was fitted?",
+  spread: "Spread: does the scatter change with the level?",
+};
+
+/** What there is evidence of where a test speaks. */
+const findings: Readonly<Record<ResidualTestKind, string>> = {
+  autocorrelation: "autocorrelation",
+  normality: "residuals that are not normal",
+  distribution: "another distribution",
+  spread: "scatter that changes with the level",
+};
+
 /**
- * The residual tests of one group, state by state.
+ * The residual tests of one group, state by state, of the residuals that the error distribution calls for: differences
+ * on the fitting scale of normal errors; randomised quantile residuals of counts and of values known to a limit, which are
+ * normal where the distribution is right; a filter's prediction errors over their standard deviations.
  *
  * Neighbouring residuals of one-step fits are correlated by the fit itself, so one degree of freedom a past value
  * that the rule reads is taken off Ljung-Box and Box-Pierce there.
+ *
+ * @param stream - of randomised quantile residuals.
  */
-export function residualTests(fit: Fit, group: GroupFit): readonly ResidualTest[] {
-  return fit.rule.states.flatMap((state) => testsOfState(fit, group, state));
+export function residualTests(fit: Fit, group: GroupFit, stream: RandomStream): readonly ResidualTest[] {
+  const { residuals, tested } = problemOf(fit).group(group.group);
+  const all = residuals(tested, stream);
+  return fit.rule.states.flatMap((state) => testsOfState(fit, group, state, all));
 }
 
-function testsOfState(fit: Fit, group: GroupFit, state: string): ResidualTest[] {
-  const points = group.points.filter((point) => point.state === state);
-  const residuals = points.map((point) => point.residual);
-  const series = residualSeries(group, state);
+function testsOfState(fit: Fit, group: GroupFit, state: string, all: Float64Array): ResidualTest[] {
+  const problem = problemOf(fit);
+  const own = group.points.map((point, i) => ({ point, residual: all[i]! }));
+  const used = own.filter(({ point, residual }) => point.state === state && Number.isFinite(residual));
+  const residuals = used.map(({ residual }) => residual);
+  const series = residualSeries(
+    used.map(({ point }) => point.index),
+    residuals,
+  );
   const lags = Math.max(1, Math.min(10, Math.floor(residuals.length / 5)));
-  const { errors, scale } = problemOf(fit);
-  const fitted = errors === "process" ? 1 + fit.rule.lags.length : 0;
-  const levels = points.map((point) => scale.to(point.fitted));
+  const fitted = problem.errors === "process" ? 1 + fit.rule.lags.length : 0;
   const improved = ljungBox(series, lags, fitted);
   const plain = boxPierce(series, lags, fitted);
   const runs = runsTest(residuals);
-  const normal = shapiroWilk(residuals);
-  const spread = spreadTest(residuals, levels);
-  const made = (name: string, question: string, statistic: number, probability: number): ResidualTest =>
-    testRow(state, name, question, statistic, probability);
+  const levels = used.map(({ point }) => problem.scale.to(point.fitted));
   return [
     lagOne(state, series, residuals.length),
-    made(
-      `Ljung-Box, ${lags} lags`,
-      "Do residuals of different periods go together?",
-      improved.statistic,
-      improved.probability,
-    ),
-    made(
-      `Box-Pierce, ${lags} lags`,
-      "Do residuals of different periods go together?",
-      plain.statistic,
-      plain.probability,
-    ),
-    made("Runs of one sign", "Do residuals of one sign come in runs?", runs.runs, runs.probability),
+    testRow(state, "autocorrelation", `Ljung-Box, ${lags} lags`, improved.statistic, improved.probability),
+    testRow(state, "autocorrelation", `Box-Pierce, ${lags} lags`, plain.statistic, plain.probability),
+    testRow(state, "autocorrelation", "Runs of one sign", runs.runs, runs.probability),
     watson(state, series),
-    ...(normal
-      ? [made("Shapiro-Wilk", "Are the residuals normal?", normal.statistic, normal.probability)]
-      : []),
-    made("Spread on level", "Does the scatter change with the level?", spread.statistic, spread.probability),
+    ...normality(problem, group, state, residuals),
+    ...spread(state, residuals, levels),
   ];
+}
+
+/** Quantile residuals are normal where the distribution is right, whichever it is; other residuals where errors are normal. */
+function normality(
+  problem: FitProblem,
+  group: GroupFit,
+  state: string,
+  residuals: readonly number[],
+): ResidualTest[] {
+  const found = shapiroWilk(residuals);
+  if (found === undefined) return [];
+  const quantiles = problem.group(group.group).tested === "quantile";
+  return [
+    quantiles
+      ? testRow(
+          state,
+          "distribution",
+          "Shapiro-Wilk of quantile residuals",
+          found.statistic,
+          found.probability,
+        )
+      : testRow(state, "normality", "Shapiro-Wilk", found.statistic, found.probability),
+  ];
+}
+
+/** Levels that differ by no more than rounding have no scatter to change with. */
+const rounding = 1e-9;
+
+function spread(state: string, residuals: readonly number[], levels: readonly number[]): ResidualTest[] {
+  const [low, high] = [Math.min(...levels), Math.max(...levels)];
+  if (!(high - low > rounding * Math.max(Math.abs(low), Math.abs(high)))) return [];
+  const { statistic, probability } = spreadTest(residuals, levels);
+  return [testRow(state, "spread", "Koenker", statistic, probability)];
 }
 
 function testRow(
   state: string,
+  kind: ResidualTestKind,
   name: string,
-  question: string,
   statistic: number,
   probability: number,
 ): ResidualTest {
   const sign = probability < clear ? "clear" : probability < weak ? "weak" : "none";
-  const told = { none: "No sign of it", weak: "A weak sign of it", clear: "A clear sign of it" }[sign];
-  const denial = { none: "Yes, as far as can be seen", weak: "Perhaps not", clear: "No" }[sign];
-  const answer = name === "Shapiro-Wilk" ? denial : told;
+  const evidence = { none: "no evidence", weak: "evidence", clear: "clear evidence" }[sign];
   return {
     state,
+    kind,
     name,
-    question,
+    question: questions[kind],
     statistic,
     probability,
     sign,
-    sentence: `${answer} (p ${probabilityText(probability)}).`,
+    sentence: `p ${probabilityText(probability)}, ${evidence} of ${findings[kind]}.`,
   };
 }
 
@@ -102,8 +148,9 @@ function lagOne(state: string, series: Float64Array, count: number): ResidualTes
   const way = statistic > 0 ? "agree" : "alternate";
   return {
     state,
+    kind: "autocorrelation",
     name: "Correlation at lag 1",
-    question: "Do neighbouring residuals go together?",
+    question: questions.autocorrelation,
     statistic,
     probability: undefined,
     sign: beyond ? "weak" : "none",
@@ -114,12 +161,12 @@ function lagOne(state: string, series: Float64Array, count: number): ResidualTes
 }
 
 function watson(state: string, series: Float64Array): ResidualTest {
-  const statistic = durbinWatson(series);
   return {
     state,
+    kind: "autocorrelation",
     name: "Durbin-Watson",
-    question: "Do neighbouring residuals go together?",
-    statistic,
+    question: questions.autocorrelation,
+    statistic: durbinWatson(series),
     probability: undefined,
     sign: "none",
     sentence:

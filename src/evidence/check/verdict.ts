@@ -1,7 +1,7 @@
 import { type Fit, type GroupFit, problemOf } from "../../estimate/index.js";
 import type { GroupCheck } from "./check.js";
 import type { RecoveredUnknown } from "./recovery.js";
-import { probabilityText } from "./residual-tests.js";
+import { probabilityText, type ResidualTestKind } from "./residual-tests.js";
 import type { Window } from "./windows.js";
 
 type Found = Omit<GroupCheck, "concerns" | "sentence">;
@@ -17,7 +17,8 @@ export function concernsOf(fit: Fit, group: GroupFit, found: Found): readonly st
     ...(group.stop.kind === "converged"
       ? []
       : ["The search did not converge, so there is no fit to check yet."]),
-    ...residualConcerns(found),
+    ...residualConcerns(fit, found),
+    ...scatterConcerns(group),
     ...endConcerns(group, found.windows),
     ...found.lackOfFit.filter((test) => test.probability < 0.05).map((test) => test.sentence),
     ...recoveryConcerns(found),
@@ -31,32 +32,50 @@ export function verdictOf(group: GroupFit, found: Found, concerns: readonly stri
   const held = heldText(recovery);
   const size = `${group.count} residuals`;
   const open = found.errors?.kind === "undecided" ? [found.errors.sentence] : [];
-  if (concerns.length === 0)
-    return [`Nothing in the checks speaks against this fit (${size}; ${held}).`, ...open].join(" ");
-  const many = concerns.length === 1 ? "One thing speaks" : `${concerns.length} things speak`;
+  if (concerns.length === 0) return [`No evidence against this fit (${size}; ${held}).`, ...open].join(" ");
+  const many = concerns.length === 1 ? "One finding" : `${concerns.length} findings`;
   return [`${many} against this fit (${size}; ${held}).`, ...concerns, ...open].join(" ");
 }
 
-/** Several tests ask after one thing, so each question is answered once, by its clearest test. */
-function residualConcerns({ tests }: Found): string[] {
-  const related = tests.filter((test) => test.sign !== "none");
-  const serial = related.filter((test) => /lag|Ljung|Runs/.test(test.name));
+/** Several tests ask after one thing, so each kind is answered once, by its clearest test. */
+function residualConcerns(fit: Fit, { tests }: Found): string[] {
+  const found: string[] = [];
+  const serial = tests.filter(({ kind, sign }) => kind === "autocorrelation" && sign !== "none");
   const clearest =
     serial.find((test) => test.sign === "clear") ?? (serial.length > 1 ? serial[0] : undefined);
-  const found: string[] = [];
   if (clearest !== undefined)
     found.push(
-      `Residuals of neighbouring periods go together (${clearest.name.toLowerCase()}: ${clearest.statistic.toFixed(2)}), so the rule or the kind of error is wrong and intervals are too narrow.`,
+      `Residuals of neighbouring periods are correlated (${clearest.name}: ${clearest.statistic.toFixed(2)}), so the rule or the kind of error is wrong and intervals are too narrow.`,
     );
-  const clear = (name: string): boolean => tests.some((test) => test.name === name && test.sign === "clear");
-  if (clear("Shapiro-Wilk"))
-    found.push("The residuals are not normal: look for single readings far out before quoting an interval.");
-  const spread = tests.find((test) => test.name === "Spread on level" && test.sign === "clear");
-  if (spread)
-    found.push(
-      `The scatter changes with the level (p ${probabilityText(spread.probability!)}): try { distribution: "lognormal" } or "normal".`,
-    );
+  for (const { kind, probability } of tests.filter((test) => test.sign === "clear"))
+    if (kind !== "autocorrelation") found.push(clearConcern(fit, kind, probability!));
   return found;
+}
+
+function clearConcern(
+  fit: Fit,
+  kind: Exclude<ResidualTestKind, "autocorrelation">,
+  probability: number,
+): string {
+  const { distribution, scale } = problemOf(fit);
+  const p = `p ${probabilityText(probability)}`;
+  switch (kind) {
+    case "normality":
+      return `The residuals are not normal (${p}): look for single readings far out before quoting an interval.`;
+    case "distribution":
+      return distribution === "poisson"
+        ? `The counts do not follow a Poisson distribution (${p}): write \`distribution: "negative-binomial"\`.`
+        : `The values do not follow the ${distribution} distribution that was fitted (${p}): look for single readings far out.`;
+    case "spread":
+      return distribution === "normal" || scale.log
+        ? `The scatter changes with the level (${p}): try \`distribution: "${scale.log ? "normal" : "lognormal"}"\`.`
+        : `The scatter changes with the level by more than the ${distribution} distribution says (${p}).`;
+  }
+}
+
+/** Counts that scatter more than their distribution allows: the size of it and the remedy. */
+function scatterConcerns({ warnings }: GroupFit): string[] {
+  return warnings.filter(({ code }) => code === "overdispersed").map(({ message }) => message);
 }
 
 /** An initial state leans on the first row by its nature, so only parameters are held against the ends. */
@@ -78,11 +97,11 @@ function endConcerns(group: GroupFit, windows: readonly Window[]): string[] {
 
 function heldText(recovery: Found["recovery"]): string {
   if (recovery === undefined)
-    return "its intervals were not tried on drawn records, which counts, censored values and groups fitted together do not allow";
-  if (recovery.resamples === 0) return "no record could be drawn from it";
+    return "its intervals were not tried on simulated records, which censored values, weighted counts and groups fitted together do not allow";
+  if (recovery.resamples === 0) return "no record could be simulated from it";
   const level = Math.round(100 * recovery.level);
   const fewest = Math.min(...recovery.parameters.map((unknown) => unknown.coverage));
-  return `in ${recovery.resamples} records drawn from it, the ${level}% intervals held the true values in ${percent(fewest)} or more`;
+  return `in ${recovery.resamples} records simulated from it, the ${level}% intervals held the true values in ${percent(fewest)} or more`;
 }
 
 function recoveryConcerns({ recovery }: Found): string[] {

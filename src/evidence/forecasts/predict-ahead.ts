@@ -26,9 +26,9 @@ export function predictAhead(
   periods: number,
 ): readonly (readonly Prediction[])[] | undefined {
   const { rule } = fit;
-  const { scale, readByFactor, group: problemOfGroup } = problemOf(fit);
+  const { scale, factors, group: problemOfGroup } = problemOf(fit);
   const { kind, unknowns, beginning: beginningOf, noise } = problemOfGroup(group.group);
-  if (kind !== "least-squares" || readByFactor.length > 0) return undefined;
+  if (kind !== "least-squares" || Object.keys(factors).length > 0) return undefined;
   const last = whole.index[origin]!;
   const parameters = Float64Array.from(rule.parameters, (name) => group.parameters[name]!);
   const beginning = beginningOf();

@@ -9,7 +9,6 @@ import { stirlingError } from "./log-gamma.js";
  */
 export function poissonProbability(count: number, mean: number): number {
   if (count === 0) return Math.exp(-mean);
-  if (mean === 0) return 0;
   return (
     (Math.exp(-stirlingError(count) - halfDeviance(count, mean)) * Math.sqrt(1 / (2 * Math.PI))) /
     Math.sqrt(count)
@@ -23,7 +22,6 @@ export function poissonProbability(count: number, mean: number): number {
 export function binomialProbability(successes: number, failures: number, p: number, q: number): number {
   if (successes === 0) return power(q, p, failures);
   if (failures === 0) return power(p, q, successes);
-  if (p === 0 || q === 0) return 0;
   const trials = successes + failures;
   const stirling = stirlingError(trials) - stirlingError(successes) - stirlingError(failures);
   const deviance = halfDeviance(successes, trials * p) + halfDeviance(failures, trials * q);

@@ -25,7 +25,15 @@ export interface NoiseLot {
 export interface NoiseDraw {
   (value: number, stream: RandomStream): number;
   readonly lot?: NoiseLot;
+  /** Least value that the family draws around a value that is not below it; absent for none. */
+  readonly least?: number;
 }
+
+/** Counts; a value below 0, around which none can be drawn, stays as it is. */
+const countDraw = (draw: (mean: number, stream: RandomStream) => number): NoiseDraw =>
+  Object.assign((value: number, stream: RandomStream): number => (value < 0 ? value : draw(value, stream)), {
+    least: 0,
+  });
 
 const normalDraw = (kind: NoiseLot["kind"], centre: number, sd: number): NoiseDraw =>
   Object.assign(
@@ -43,10 +51,10 @@ export function noiseDraw(noise: Noise): NoiseDraw {
     case "lognormal":
       return normalDraw("factors", noise.centre === "mean" ? -0.5 * noise.sd * noise.sd : 0, noise.sd);
     case "poisson":
-      return poissonDraw;
+      return countDraw(poissonDraw);
     case "negative-binomial": {
       const { size } = noise;
-      return (value, stream) => poissonDraw((value / size) * gammaDraw(size, stream), stream);
+      return countDraw((value, stream) => poissonDraw((value / size) * gammaDraw(size, stream), stream));
     }
     case "demographic": {
       const { variance } = noise;

@@ -38,7 +38,11 @@ export function drawAlongProfile(fit: Fit, group: GroupFit, loose: Estimate): Pa
     const root = studentQuantile(stream.uniform(), group.degreesOfFreedom);
     const { low, high, share } = around(rungs, root);
     const { factor } = share < 0.5 ? low : high;
-    for (let i = 0; i < size - 1; i++) normals[i] = stream.normal();
+    let distance = root * root;
+    for (let i = 0; i < size - 1; i++) {
+      normals[i] = stream.normal();
+      distance += normals[i]! * normals[i]!;
+    }
     let row = 0;
     for (let i = 0; i < size; i++) {
       out[i] = low.centre[i]! + share * (high.centre[i]! - low.centre[i]!);
@@ -46,7 +50,7 @@ export function drawAlongProfile(fit: Fit, group: GroupFit, loose: Estimate): Pa
       for (let k = 0; k <= row; k++) out[i] = out[i]! + factor[row * (size - 1) + k]! * normals[k]!;
       row++;
     }
-    return drawnSpread(group.degreesOfFreedom, stream);
+    return { sigma: drawnSpread(group.degreesOfFreedom, stream), distance };
   };
 }
 
@@ -63,6 +67,26 @@ export function loosest(group: GroupFit): Estimate | undefined {
     (estimate) => estimate.role !== "scale" && estimate.trace.length > 1 && Number.isFinite(rise(estimate)),
   );
   return open.sort((a, b) => rise(a) - rise(b))[0];
+}
+
+/** A profile with one side of its interval longer than the other by less than this passes for a parabola. */
+const asParabola = 1.25;
+
+/**
+ * The unknown whose profile is furthest from a parabola: around the estimates its draws, and those of what depends on
+ * it, would stray from what the record allows.
+ */
+export function mostBent(group: GroupFit): Estimate | undefined {
+  const bend = ({ value, profile: { lower, upper } }: Estimate): number => {
+    if (lower === undefined || upper === undefined) return 1;
+    const ratio = (upper - value) / (value - lower);
+    return Math.max(ratio, 1 / ratio);
+  };
+  const known = group.estimates.filter(
+    (estimate) => estimate.role !== "scale" && estimate.trace.length > 1 && bend(estimate) > asParabola,
+  );
+  const [first] = known.sort((a, b) => bend(b) - bend(a));
+  return known.find(({ role }) => role === "parameter") ?? first;
 }
 
 /** Rungs by increasing root, kept where the root rises with the value; each begins where its neighbour ended. */

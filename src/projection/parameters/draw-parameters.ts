@@ -1,10 +1,38 @@
 import { choleskyFactor, gammaDraw, type RandomStream } from "../../numeric/index.js";
 
+/** What is known of a draw of the unknowns beside its values. */
+export interface DrawnUnknowns {
+  /** The drawn sigma as a multiple of the estimated one. */
+  readonly sigma: number;
+  /** Squared distance from the estimates by the covariance: what the increase of the objective would be, were it quadratic. */
+  readonly distance: number;
+}
+
+/** Draws unknowns of a fit around their estimates; writes them into `out`. */
+export type ParametersDraw = (stream: RandomStream, out: Float64Array) => DrawnUnknowns;
+
 /**
- * Draws unknowns of a fit around their estimates; writes into `out`, and gives the drawn sigma as a multiple of the
- * estimated one.
+ * How likely the unknowns of a draw are by the record, over how likely they were to be drawn: what the record says of
+ * unknowns at which its objective increases by so much, against the multivariate t of the draws.
+ *
+ * @param increase - in units of sigma^2, or of twice the log-likelihood.
+ * @param size - how many unknowns are drawn.
+ * @param exact - whether sigma is that of least squares, so that the record's own density is of the same t form.
+ * @see Box and Tiao (1973), Bayesian Inference in Statistical Analysis, section 8.2, for the t form in the sum of squares
+ *   (from memory).
  */
-export type ParametersDraw = (stream: RandomStream, out: Float64Array) => number;
+export function recordRatio(
+  increase: number,
+  { distance }: DrawnUnknowns,
+  degreesOfFreedom: number,
+  size: number,
+  exact: boolean,
+): number {
+  const power = 0.5 * (degreesOfFreedom + size);
+  const drawn = power * Math.log1p(distance / degreesOfFreedom);
+  const said = exact ? power * Math.log1p(increase / degreesOfFreedom) : 0.5 * increase;
+  return Math.exp(drawn - said);
+}
 
 /** sqrt((n - p)/chi-square(n - p)): what the residuals of a fit leave open of sigma. */
 export function drawnSpread(degreesOfFreedom: number, stream: RandomStream): number {
@@ -33,11 +61,13 @@ export function parametersDraw(
     for (let i = 0; i < size; i++) normals[i] = stream.normal();
     const widen = drawnSpread(degreesOfFreedom, stream);
     out.set(estimates);
+    let squares = 0;
     drawn.forEach((unknown, i) => {
+      squares += normals[i]! * normals[i]!;
       let sum = 0;
       for (let k = 0; k <= i; k++) sum += factor[i * size + k]! * normals[k]!;
       out[unknown] = estimates[unknown]! + widen * sum;
     });
-    return widen;
+    return { sigma: widen, distance: widen * widen * squares };
   };
 }

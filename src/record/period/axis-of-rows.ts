@@ -1,6 +1,6 @@
 import type { Calendar } from "./calendar.js";
 import { calendarDay, clockOf, dayLength, isMonthEnd, type Moment, mondayBefore, monthOf } from "./moment.js";
-import type { PeriodAxis } from "./period-axis.js";
+import { type PeriodAxis, rounding } from "./period-axis.js";
 import type { PeriodForm } from "./period-text.js";
 import type { PlacedRows } from "./placed-rows.js";
 
@@ -37,8 +37,13 @@ type Counted = Pick<PeriodAxis, "form" | "counts" | "origin" | "stride" | "day" 
 
 function numbersOf({ time, calendar }: PlacedRows, { rows, index }: IndexedRows): Counted {
   const { every } = calendar.step;
-  const origins = Array.from(rows, (row, i) => Number((time[row]! - index[i]! * every).toPrecision(12)));
-  return { form: "number", counts: "numbers", origin: mostCommon(origins).value, stride: every };
+  const first = time[rows[0]!]!;
+  const originOf = (i: number): number => time[rows[i]!]! - index[i]! * every;
+  // Most records lie on their step but for the rounding of binary fractions.
+  let isEven = true;
+  for (let i = 0; i < rows.length && isEven; i++) isEven = Math.abs(originOf(i) - first) <= rounding * every;
+  const origin = isEven ? first : mostCommon(rows.length, (i) => Number(originOf(i).toPrecision(12))).value;
+  return { form: "number", counts: "numbers", origin, stride: every };
 }
 
 function momentsOf(
@@ -47,8 +52,7 @@ function momentsOf(
   { rows, index }: IndexedRows,
 ): Counted {
   const stride = calendar.length! * calendar.step.every;
-  const origins = Array.from(rows, (row, i) => moments[row]! - index[i]! * stride);
-  const { value, count } = mostCommon(origins);
+  const { value, count } = mostCommon(rows.length, (i) => moments[rows[i]!]! - index[i]! * stride);
   const isWeekly = stride % (7 * dayLength) === 0;
   const anyDay = calendar.name === "iso-week" && 2 * count <= rows.length;
   if (isWeekly && (form === "iso-week" || anyDay))
@@ -77,7 +81,7 @@ function monthsOf(
     isDay(form) && calendar.step.begins === undefined ? dayOf(recorded, calendar, months) : undefined;
   if (day === undefined) return { ...counted, form: wholeForm(calendar, form), origin: first };
   const offset = monthOf(recorded[0]!) - first;
-  const clock = mostCommon(recorded.map(clockOf)).value;
+  const clock = mostCommon(recorded.length, (i) => clockOf(recorded[i]!)).value;
   return {
     ...counted,
     form: clock === 0 ? "date" : finestForm(clock, dayLength),
@@ -119,10 +123,16 @@ function dayOf(dates: readonly Moment[], { name }: Calendar, months: number): nu
 }
 
 /** The value that occurs most often; of several the first. */
-function mostCommon(values: readonly number[]): { readonly value: number; readonly count: number } {
+function mostCommon(
+  length: number,
+  valueAt: (place: number) => number,
+): { readonly value: number; readonly count: number } {
   const counts = new Map<number, number>();
-  for (const value of values) counts.set(value, (counts.get(value) ?? 0) + 1);
-  let most = { value: values[0]!, count: 0 };
+  for (let i = 0; i < length; i++) {
+    const value = valueAt(i);
+    counts.set(value, (counts.get(value) ?? 0) + 1);
+  }
+  let most = { value: Number.NaN, count: 0 };
   for (const [value, count] of counts) if (count > most.count) most = { value, count };
   return most;
 }

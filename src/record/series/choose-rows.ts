@@ -3,6 +3,7 @@ import { rowsLeftOut } from "../decisions/correct.js";
 import { noSuchRow } from "../decisions/refusals.js";
 import { cellText, type PeriodText, periodText } from "../period/period-text.js";
 import { conditionWrong, noRowsChosen } from "../refusals.js";
+import { counting } from "./split-rows.js";
 
 /** A cell that rows are chosen by. */
 export type CellValue = string | number | boolean | Date | null;
@@ -47,7 +48,7 @@ export function chooseRows(
     testOf(columnNamed(table, name, "a condition"), name, condition),
   );
   const inRange = rangeTest(range, rowCount(table));
-  const all = Int32Array.from({ length: rowCount(table) }, (_, row) => row);
+  const all = counting(rowCount(table));
   const chosen =
     conditions.length === 0 && inRange === undefined
       ? all

@@ -30,22 +30,25 @@ export function observedGroup(
   const { present, inputsOnly } = split;
   if (present.length === 0) return { group: undefined, used: 0 };
   const rows = picked(merged.rows, present);
-  const stepsTo = (places: Int32Array): Int32Array =>
-    wholeSteps(picked(merged.rows, places), rows[0]!, periods, options.offStep ?? "refuse", log);
+  const stepsTo = (own: Int32Array): Int32Array =>
+    wholeSteps(own, rows[0]!, periods, options.offStep ?? "refuse", log);
+  // Columns that lose no row are used as they are: a record may have millions of rows.
+  const at = (values: Float64Array, places: Int32Array): Float64Array =>
+    places.length === values.length ? values : pick(values, places);
   const inputsAt = (places: Int32Array): Named<Float64Array> =>
-    byName(columns.inputs, (i) => pick(split.inputs[i]!, places));
-  const index = stepsTo(present);
+    byName(columns.inputs, (i) => at(split.inputs[i]!, places));
+  const index = stepsTo(rows);
   const { variation } = merged;
   const group: ObservedGroup = {
     name,
     axis: axisOfRows(periods, { rows, index }),
     index,
     time: pick(periods.time, rows),
-    values: byName(columns.states, (i) => pick(split.states[i]!, present)),
+    values: byName(columns.states, (i) => at(split.states[i]!, present)),
     inputs: inputsAt(present),
     ...(inputsOnly.length > 0 && {
       withoutValue: {
-        index: stepsTo(inputsOnly),
+        index: stepsTo(picked(merged.rows, inputsOnly)),
         inputs: inputsAt(inputsOnly),
         rows: picked(merged.rows, inputsOnly).map((row) => row + 1),
       },
@@ -60,8 +63,7 @@ export function observedGroup(
       replicates: byName(columns.states, (i) => variationAt(variation(columns.states[i]!.values), present)),
     }),
   };
-  const used = [...present, ...inputsOnly].reduce((sum, i) => sum + merged.held[i]!, 0);
-  return { group, used };
+  return { group, used: heldBy(merged, present) + heldBy(merged, inputsOnly) };
 }
 
 type Named<T> = Readonly<Record<string, T>>;
@@ -71,7 +73,15 @@ function byName<T>(columns: readonly ReadColumn[], of: (place: number) => T): Na
 }
 
 function picked(rows: Int32Array, places: Int32Array): Int32Array {
-  return places.map((i) => rows[i]!);
+  const own = new Int32Array(places.length);
+  for (let i = 0; i < places.length; i++) own[i] = rows[places[i]!]!;
+  return own;
+}
+
+function heldBy({ held }: MergedRows, places: Int32Array): number {
+  let sum = 0;
+  for (let i = 0; i < places.length; i++) sum += held[places[i]!]!;
+  return sum;
 }
 
 function variationAt({ count, deviation }: ReplicateVariation, places: Int32Array): ReplicateVariation {

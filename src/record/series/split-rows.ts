@@ -24,17 +24,32 @@ export function splitRows(
 ): SplitRows {
   const states = columns.states.map(({ values, doubled }) => merged.carry(values, doubled));
   const inputs = columns.inputs.map(({ values, doubled }) => merged.carry(values, doubled));
-  const places = Int32Array.from(merged.rows.keys());
+  const places = counting(merged.rows.length);
   const isEmpty = (i: number): boolean => states.some((values) => Number.isNaN(values[i]!));
+  const empty = emptyPlaces(states);
   const first = places.find((i) => !isEmpty(i)) ?? places.length;
   const hasInputs = (i: number): boolean => i > first && inputs.some((values) => !Number.isNaN(values[i]!));
-  const empty = places.filter(isEmpty);
   for (const i of empty) {
     const state = states.findIndex((values) => Number.isNaN(values[i]!));
     noteMissing(merged.rows[i]!, columns.states[state]!.column, hasInputs(i), periods, log);
   }
   const present = empty.length === 0 ? places : places.filter((i) => !isEmpty(i));
   return { states, inputs, present, inputsOnly: empty.filter(hasInputs) };
+}
+
+/** 0, 1, 2 and so on. */
+export function counting(length: number): Int32Array {
+  const places = new Int32Array(length);
+  for (let i = 0; i < length; i++) places[i] = i;
+  return places;
+}
+
+/** Places at which any column is empty. A plain loop: a record may have millions of rows. */
+function emptyPlaces(columns: readonly Float64Array[]): Int32Array {
+  const empty = new Set<number>();
+  for (const values of columns)
+    for (let i = 0; i < values.length; i++) if (Number.isNaN(values[i]!)) empty.add(i);
+  return Int32Array.from(empty).sort();
 }
 
 function noteMissing(

@@ -8,6 +8,7 @@ import {
   fraction,
   growthFactor,
   level,
+  neverNegative,
   positive,
   quantityWithUnit,
 } from "./quantities.js";
@@ -68,7 +69,7 @@ const resource: CatalogueEntry = {
     Y: dimensionless("yield: mass formed per mass of resource used"),
   },
   validWhen: ["mu > 0", "h > 0", "Ks > 0", "Y > 0", "N0 >= 0", "S0 >= 0", "h*mu*N0 <= Y*(Ks + S0)"],
-  bounds: { mu: positive, h: positive, Ks: positive, Y: positive, N: positive, S: positive },
+  bounds: { mu: positive, h: positive, Ks: positive, Y: positive, N: positive, S: neverNegative },
   equilibria: [],
   closedForms: [],
   remarks:

@@ -8,6 +8,7 @@ import {
   growthFactor,
   inStateUnit,
   level,
+  neverNegative,
   perStateUnit,
   positive,
   rate,
@@ -20,7 +21,7 @@ const logistic: CatalogueEntry = {
   source: "May (1976), Simple mathematical models with very complicated dynamics, Nature 261, 459-467",
   quantities: { N: level, r: rate, K: carryingCapacity },
   validWhen: ["r > 0", "r <= 3", "K > 0", "N0 >= 0 and N0 <= K*(1 + 1/r)"],
-  bounds: { r: positive, K: positive, N: positive },
+  bounds: { r: positive, K: positive, N: neverNegative },
   start: { r: 0.5 },
   equilibria: [
     { at: { N: "0" }, multiplier: "1 + r" },

@@ -1,3 +1,5 @@
+import type { Bounds } from "../recurrence-options.js";
+
 /** A state, parameter or input of a catalogue rule: its meaning, and its unit in terms of "level" and "period". */
 export interface NamedQuantity {
   readonly meaning: string;
@@ -46,6 +48,6 @@ export interface NamedRule {
 export interface CatalogueEntry extends NamedRule {
   readonly text: string;
   readonly inputs?: readonly string[];
-  readonly bounds?: Readonly<Record<string, readonly [number, number]>>;
+  readonly bounds?: Readonly<Record<string, Bounds>>;
   readonly start?: Readonly<Record<string, number>>;
 }

@@ -45,6 +45,12 @@ interface OptionCheck {
   readonly accepts: Accepts;
 }
 
+const isRange = (value: unknown): boolean =>
+  Array.isArray(value) && value.length === 2 && value[0] < value[1];
+const isRangeWithEnds = (value: unknown): boolean => {
+  const { range, atBounds } = (value ?? {}) as { readonly range?: unknown; readonly atBounds?: unknown };
+  return isRange(range) && (atBounds === "absorbed" || atBounds === "error");
+};
 const isNumber = (value: unknown): boolean => typeof value === "number" && Number.isFinite(value);
 
 function checks(rule: CheckedRule): readonly OptionCheck[] {
@@ -63,9 +69,10 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
       option: "bounds",
       what: "state or parameter",
       names: [...states, ...parameters],
-      expected: () => "two numbers, the lower one first, as in [0, Infinity]",
-      accepts: (value: readonly [number, number]) =>
-        Array.isArray(value) && value.length === 2 && value[0] < value[1],
+      expected: (name) =>
+        `two numbers, the lower one first, as in [0, Infinity]${states.includes(name) ? ', or { range: [0, Infinity], atBounds: "absorbed" or "error" }' : ""}`,
+      accepts: (value: unknown, name: string) =>
+        isRange(value) || (states.includes(name) && isRangeWithEnds(value)),
     },
     { option: "start", what: "parameter", names: parameters, expected: number, accepts: isNumber },
     { option: "fixed", what: "parameter", names: parameters, expected: number, accepts: isNumber },

@@ -6,7 +6,7 @@ import { lines, readArguments } from "./source-parts.js";
 const sharedByPaths: ReadonlySet<LeafRole> = new Set(["parameter", "input", "period"]);
 const fixedPerPath: ReadonlySet<LeafRole> = new Set(["input", "period"]);
 
-/** Paths stepped in one turn of the unrolled loop: their steps overlap in the processor, and one check serves all. */
+/** Paths stepped in one turn of the unrolled loop: their steps overlap in the processor. */
 const unrollFactor = 8;
 
 /** Source that steps the path whose state vector starts at `place`. */
@@ -19,50 +19,51 @@ function stepLines(rule: RuleGraph, program: EmittedProgram, place: string): rea
   ];
 }
 
-/**
- * Unrolled loop for a rule of one state without bounds. A finite sum shows that every path of the group is finite;
- * otherwise each is checked.
- */
+/** Unrolled loop for a rule of one state. */
 function unrolledLoop(rule: RuleGraph, program: EmittedProgram): readonly string[] {
-  const step = (k: number): readonly string[] => [
-    "{",
-    ...stepLines(rule, program, `path + ${k}`),
-    `e${k} = n0;`,
-    "}",
-  ];
-  const sum = Array.from({ length: unrollFactor / 2 }, (_, k) => `(e${2 * k} + e${2 * k + 1})`).join(" + ");
   return [
-    "if (low0 === -Number.MAX_VALUE && high0 === Number.MAX_VALUE) {",
-    lines(unrollFactor, (k) => `let e${k} = 0;`),
     `for (; path + ${unrollFactor} <= last; path += ${unrollFactor}) {`,
-    ...Array.from({ length: unrollFactor }, (_, k) => step(k)).flat(),
-    `const sum = ${sum};`,
-    `if (sum - sum !== 0) for (let at = path; at < path + ${unrollFactor}; at++) {`,
-    "if (!(present[at] >= low0 && present[at] <= high0)) present[at] = NaN;",
-    "}",
-    "}",
+    ...Array.from({ length: unrollFactor }, (_, k) => [
+      "{",
+      ...stepLines(rule, program, `path + ${k}`),
+      "}",
+    ]).flat(),
     "}",
   ];
 }
 
-/** Body of `advance(present, first, last, parameters, inputs, t, limits)`; what all paths share is computed before the loops. */
+/** Reads the parameters of one path where every path has its own. */
+const ownParameters = (count: number): string =>
+  lines(count, (i) => `const c${i} = parameters[path * ${count} + ${i}];`);
+
+/** Body of `advance(present, first, last, parameters, inputs, t)`: whatever paths share stands before the loops. */
 export function advanceSource(rule: RuleGraph, shared: boolean): string {
   const program = emitProgram(rule.next, shared ? sharedByPaths : fixedPerPath);
-  const { states, parameters, observed } = rule;
-  const own = lines(parameters, (i) => `const c${i} = parameters[path * ${parameters} + ${i}];`);
-  const within = Array.from({ length: observed }, (_, i) => `n${i} >= low${i} && n${i} <= high${i}`).join(
-    " && ",
-  );
+  const { states, parameters } = rule;
   return [
-    lines(observed, (i) => `const low${i} = limits[${2 * i}];\nconst high${i} = limits[${2 * i + 1}];`),
     shared ? readArguments(rule) : readArguments({ ...rule, parameters: 0 }),
     ...program.preamble,
     "let path = first;",
     ...(shared && states === 1 ? unrolledLoop(rule, program) : []),
     `for (let at = path * ${states}; path < last; path++, at += ${states}) {`,
-    shared ? "" : own,
+    shared ? "" : ownParameters(parameters),
     ...stepLines(rule, program, "at"),
-    `if (!(${within})) for (let i = 0; i < ${states}; i++) present[at + i] = NaN;`,
+    "}",
+  ].join("\n");
+}
+
+/** Body of `quantities(present, first, last, parameters, stride, inputs, t, out)`. */
+export function quantitiesSource(rule: RuleGraph): string {
+  const program = emitProgram(rule.quantities, fixedPerPath);
+  const { states, parameters } = rule;
+  return [
+    readArguments({ ...rule, parameters: 0 }),
+    ...program.preamble,
+    `for (let path = first, at = first * ${states}; path < last; path++, at += ${states}) {`,
+    lines(parameters, (i) => `const c${i} = parameters[path * stride + ${i}];`),
+    lines(states, (i) => `const s${i} = present[at + ${i}];`),
+    ...program.body,
+    lines(rule.quantities.length, (i) => `out[${i}][path] = ${program.read(rule.quantities[i]!)};`),
     "}",
   ].join("\n");
 }

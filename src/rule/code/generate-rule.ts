@@ -1,7 +1,7 @@
 import type { Advance, CompiledRule, PathSums, StepSums } from "../compiled-rule.js";
 import { modulo, roundTo } from "../graph/operations.js";
 import type { RuleGraph } from "../graph/rule-graph.js";
-import { advanceSource } from "./advance-source.js";
+import { advanceSource, quantitiesSource } from "./advance-source.js";
 import { interpretGraph } from "./interpret-graph.js";
 import { pathSource, stepSource } from "./path-source.js";
 import { sensitivitySource } from "./sensitivity-source.js";
@@ -68,12 +68,15 @@ export function generateRule(rule: RuleGraph): CompiledRule {
   ) as [() => PathSums, () => PathSums];
   const [advance, advanceEach] = [true, false].map((shared) =>
     lazy(() =>
-      makeFunction<Advance>(
-        "present, first, last, parameters, inputs, t, limits",
-        advanceSource(rule, shared),
-      ),
+      makeFunction<Advance>("present, first, last, parameters, inputs, t", advanceSource(rule, shared)),
     ),
   ) as [() => Advance, () => Advance];
+  const quantities = lazy(() =>
+    makeFunction<CompiledRule["quantities"]>(
+      "present, first, last, parameters, stride, inputs, t, out",
+      quantitiesSource(rule),
+    ),
+  );
   const [plainSteps, logSteps] = [false, true].map((logarithmic) =>
     lazy(() =>
       makeFunction<StepSums>(
@@ -91,6 +94,9 @@ export function generateRule(rule: RuleGraph): CompiledRule {
     },
     get advanceEach() {
       return advanceEach();
+    },
+    get quantities() {
+      return quantities();
     },
     get step() {
       return step();

@@ -43,6 +43,7 @@ export function interpretGraph(rule: RuleGraph): CompiledRule {
     path,
     advance: interpretAdvance(rule, step, true),
     advanceEach: interpretAdvance(rule, step, false),
+    quantities: interpretQuantities(rule),
     pathWithSensitivities: interpretSensitivities(rule),
     pathSums: undefined,
     stepSums: undefined,
@@ -50,16 +51,25 @@ export function interpretGraph(rule: RuleGraph): CompiledRule {
 }
 
 function interpretAdvance(rule: RuleGraph, step: CompiledRule["step"], shared: boolean): Advance {
-  const outside = (state: Float64Array, limits: Float64Array): boolean =>
-    state
-      .subarray(0, rule.observed)
-      .some((value, i) => !(value >= limits[2 * i]! && value <= limits[2 * i + 1]!));
-  return (present, first, last, parameters, inputs, t, limits) => {
+  return (present, first, last, parameters, inputs, t) => {
     for (let path = first; path < last; path++) {
       const state = present.subarray(path * rule.states, (path + 1) * rule.states);
       const from = shared ? 0 : path * rule.parameters;
       step(state, parameters.subarray(from, from + rule.parameters), inputs, t, state);
-      if (outside(state, limits)) state.fill(Number.NaN);
+    }
+  };
+}
+
+function interpretQuantities(rule: RuleGraph): CompiledRule["quantities"] {
+  const evaluate = graphEvaluator(rule.quantities);
+  return (present, first, last, parameters, stride, inputs, t, out) => {
+    for (let path = first; path < last; path++) {
+      const state = present.subarray(path * rule.states, (path + 1) * rule.states);
+      const own = parameters.subarray(path * stride, path * stride + rule.parameters);
+      const read = evaluate({ state, parameters: own, inputs, t });
+      rule.quantities.forEach((node, k) => {
+        out[k]![path] = read(node);
+      });
     }
   };
 }

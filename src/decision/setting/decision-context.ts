@@ -9,17 +9,26 @@ import {
   runStart,
   type StartOptions,
 } from "../../dynamics/index.js";
-import { type Fit, problemOf } from "../../estimate/index.js";
-import { type RunHooks, type Tick, ticker } from "../../numeric/index.js";
-import { type FitGround, fitGround, type Ground, type Noise, ruleNoise } from "../../projection/index.js";
+import { type Fit, type GroupFit, problemOf } from "../../estimate/index.js";
+import { type RandomStream, type RunHooks, randomStream, type Tick, ticker } from "../../numeric/index.js";
+import {
+  centralLevels,
+  type FitGround,
+  fitGround,
+  type Ground,
+  levelValues,
+  type Noise,
+  ruleNoise,
+  startNames,
+} from "../../projection/index.js";
 import { indexOf, labelAt, labelBetween, type PeriodAxis } from "../../record/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../../rule/index.js";
-import type { MeasureUnits } from "../measure/measure.js";
-import { refuseGroup, refusePeriod } from "../refusals.js";
-import { plain } from "../words/amount.js";
+import { groupError, periodError } from "../errors.js";
+import type { MeasureUnits } from "../measure/measure-words.js";
+import { withinError } from "../words/amount.js";
 
 /** What a decision is worked out from, beside the rule or fit itself. */
-export interface StandingOptions extends StartOptions, RunHooks {
+export interface DecisionOptions extends StartOptions, RunHooks {
   /** Whole periods ahead. */
   readonly periods: number;
   /** By input: its plan; for a fit the first period ahead comes first, for a rule period 0. */
@@ -30,23 +39,21 @@ export interface StandingOptions extends StartOptions, RunHooks {
   readonly parameters?: Readonly<Record<string, number>>;
   /** Of a rule: its first values by state. */
   readonly initial?: InitialValues;
-  /** Of a rule: random change by state, for probabilities. */
+  /** Of a rule: random change by state; every measure is then one of the paths' distribution. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** Random paths for probabilities and margins; default 2000. */
+  /** Paths where chance has a part; default 4000. */
   readonly paths?: number;
   /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
 }
 
 /** A rule or a fit made ready for questions about its future. */
-export interface Standing extends MeasureUnits {
+export interface DecisionContext extends MeasureUnits {
   readonly rule: Rule;
   readonly fit: Fit | undefined;
   readonly ground: Ground;
   /** Of a fit. */
   readonly fitGround: FitGround | undefined;
-  /** Row of the path that is the present; what is ahead begins one row later. */
-  readonly present: number;
   readonly axis: PeriodAxis;
   /** Time of period 0 of the axis, in the period column's unit. */
   readonly zero: number;
@@ -54,10 +61,13 @@ export interface Standing extends MeasureUnits {
   readonly timeOf: (period: string | number) => number;
   /** The period column's value at a row. */
   readonly timeAt: (row: number) => number;
-  readonly change: readonly (Noise | undefined)[];
+  /** By state: the random change at parameters of its own, because its size may be one of them. */
+  readonly changeAt: (parameters: Float64Array) => readonly (Noise | undefined)[];
   readonly plans: InputPlans;
   readonly paths: number;
   readonly seed: number;
+  /** Random numbers of the question, the same at every call: those of a forecast or simulation with this seed. */
+  readonly stream: () => RandomStream;
   /** Called before each run of the rule. */
   readonly tick: Tick;
   /** The ground under other plans of inputs. */
@@ -71,20 +81,28 @@ const runsOfFit = 5000;
 /** Whether a subject is a fit. */
 export const isFit = (subject: Fit | Rule): subject is Fit => subject.kind === "fit";
 
-/** Makes a rule or a fit ready. */
-export function standingOf(subject: Fit | Rule, options: StandingOptions): Standing {
-  return isFit(subject) ? fitStanding(subject, options) : ruleStanding(subject, options);
-}
-
 /** "N" of "N[0]"; any other name is its own. */
 export const stateOf = (name: string): string => name.replace(/\[\d+\]$/, "");
 
-function fitStanding(fit: Fit, options: StandingOptions): Standing {
+/** Makes a rule or a fit ready. */
+export function decisionContext(subject: Fit | Rule, options: DecisionOptions): DecisionContext {
+  const own = isFit(subject) ? fitContext(subject, options) : ruleContext(subject, options);
+  const { ground } = own;
+  return {
+    ...own,
+    paths: options.paths ?? 4000,
+    seed: options.seed ?? 1,
+    tick: ticker(options, isFit(subject) ? runsOfFit : runsOfRule),
+    random: own.changeAt(ground.parameters).some((noise) => noise !== undefined),
+    levelAt: (level) => levelValues(level, centralLevels(ground))[0]!,
+  };
+}
+
+type OwnContext = Omit<DecisionContext, "paths" | "seed" | "tick" | "random" | "levelAt">;
+
+function fitContext(fit: Fit, options: DecisionOptions): OwnContext {
   const { rule, observations } = fit;
-  const names = fit.groups.map(({ group }) => group);
-  if (options.group === undefined && fit.groups.length > 1) throw refuseGroup(undefined, names);
-  const group = fit.groups.find((each) => each.group === (options.group ?? names[0]));
-  if (group === undefined) throw refuseGroup(options.group, names);
+  const [group, place] = groupOf(fit, options.group);
   const planned = (plans: InputPlans): FitGround => fitGround(fit, group, options.periods, plans);
   const plans = Object.fromEntries(
     Object.entries(options.inputs ?? {}).map(([name, plan]) => [name, planOfGroup(name, plan, group.group)]),
@@ -97,27 +115,38 @@ function fitStanding(fit: Fit, options: StandingOptions): Standing {
     fit,
     ground,
     fitGround: ground,
-    present: ground.recordEnd - ground.from,
     axis,
     zero: first,
     timeAt: (row) => first + (ground.from + row) * axis.step.every,
     timeWords: timeWordsOf(axis, first),
     timeOf: timeReader(axis, first),
-    change: problemOf(fit).group(group.group).noise.change,
+    changeAt: () => problemOf(fit).group(group.group).noise.change,
     plans,
-    paths: options.paths ?? 2000,
-    seed: options.seed ?? 1,
-    tick: ticker(options, runsOfFit),
+    stream: () =>
+      Array.from({ length: place }).reduce<RandomStream>(
+        (own) => own.jump(),
+        randomStream(options.seed ?? 1),
+      ),
     planned,
     unitOf: (name) => {
       const state = stateOf(name);
-      return observations.states.find((each) => each.name === state)?.unit || (rule.units[state] ?? "");
+      const scaled = ground.factors[rule.states.indexOf(state)] !== undefined;
+      const recorded = observations.states.find((each) => each.name === state)?.unit;
+      return (scaled ? undefined : recorded) || (rule.units[state] ?? "");
     },
     periodUnit: axis.unit,
   };
 }
 
-function ruleStanding(rule: Rule, options: StandingOptions): Standing {
+function groupOf(fit: Fit, name: string | undefined): readonly [GroupFit, number] {
+  const names = fit.groups.map(({ group }) => group);
+  if (name === undefined && fit.groups.length > 1) throw groupError(undefined, names);
+  const place = fit.groups.findIndex(({ group }) => group === (name ?? names[0]));
+  if (place < 0) throw groupError(name, names);
+  return [fit.groups[place]!, place];
+}
+
+function ruleContext(rule: Rule, options: DecisionOptions): OwnContext {
   const { periods } = options;
   const parameters = parametersBySlot(rule, options.parameters);
   const start = runStart(options);
@@ -126,7 +155,8 @@ function ruleStanding(rule: Rule, options: StandingOptions): Standing {
   const compiled = compileRule(rule);
   const planned = (plans: InputPlans): Ground => {
     const inputs = inputsFrom(rule, start, periods, plans);
-    return { rule, compiled, parameters, initial, inputs, from, periods };
+    const named = { startNames: startNames(rule), firstValues: {} };
+    return { rule, compiled, parameters, initial, inputs, from, periods, present: 0, ...named };
   };
   const first = recorded?.time[0] ?? (axis.counts === "numbers" ? axis.origin : 0);
   return {
@@ -134,17 +164,14 @@ function ruleStanding(rule: Rule, options: StandingOptions): Standing {
     fit: undefined,
     ground: planned(options.inputs ?? {}),
     fitGround: undefined,
-    present: 0,
     axis,
     zero: first,
     timeAt: (row) => first + (from + row) * axis.step.every,
     timeWords: timeWordsOf(axis, first),
     timeOf: timeReader(axis, first),
-    change: ruleNoise(rule, parameters, options.noise),
     plans: options.inputs ?? {},
-    paths: options.paths ?? 2000,
-    seed: options.seed ?? 1,
-    tick: ticker(options, runsOfRule),
+    changeAt: (at) => ruleNoise(rule, at, options.noise),
+    stream: () => randomStream(options.seed ?? 1),
     planned,
     unitOf: (name) => rule.units[stateOf(name)] ?? "",
     periodUnit: axis.unit,
@@ -152,16 +179,16 @@ function ruleStanding(rule: Rule, options: StandingOptions): Standing {
 }
 
 /** A time of the period column in a sentence; `zero` is that of period 0. */
-function timeWordsOf(axis: PeriodAxis, zero: number): (time: number) => string {
-  if (axis.counts === "numbers") return (time) => `${axis.unit} ${plain(time, 5)}`;
+function timeWordsOf(axis: PeriodAxis, zero: number): DecisionContext["timeWords"] {
+  if (axis.counts === "numbers") return (time, error = 0) => `${axis.unit} ${withinError(time, error, 5)}`;
   return (time) => labelBetween(axis, 0, (time - zero) / axis.step.every);
 }
 
-function timeReader(axis: PeriodAxis, zero: number): Standing["timeOf"] {
+function timeReader(axis: PeriodAxis, zero: number): DecisionContext["timeOf"] {
   return (period) => {
     if (typeof period === "number") return period;
     const index = indexOf(axis, period);
-    if (index === undefined) throw refusePeriod(period, labelAt(axis, 0), labelAt(axis, 1));
+    if (index === undefined) throw periodError(period, labelAt(axis, 0), labelAt(axis, 1));
     return zero + index * axis.step.every;
   };
 }

@@ -1,12 +1,12 @@
 import { type Fit, type FittedNoise, problemOf, type Scale } from "../../estimate/index.js";
 import { quantile, type RandomStream, randomStream } from "../../numeric/index.js";
 import { centralPath, type Ground, noiseDraw } from "../../projection/index.js";
+import { type DecisionContext, decisionContext } from "../setting/decision-context.js";
 import { drawnGrounds } from "../setting/setting-margin.js";
-import { type Standing, standingOf } from "../setting/standing.js";
 
 /** Parameters drawn from a fit, with what each says of readings to come; values on the fitting scale. */
-export interface ImaginedReadings {
-  readonly standing: Standing;
+export interface SimulatedReadings {
+  readonly context: DecisionContext;
   readonly grounds: readonly Ground[];
   /** [draws][rows of the path]: the value that a reading is scattered around. */
   readonly centres: readonly Float64Array[];
@@ -15,8 +15,8 @@ export interface ImaginedReadings {
   readonly scale: Scale;
 }
 
-/** What is imagined of a fit. */
-export interface ImagineOptions {
+/** What is simulated of a fit. */
+export interface SimulateReadingsOptions {
   readonly periods: number;
   readonly group?: string;
   readonly state: number;
@@ -26,27 +26,31 @@ export interface ImagineOptions {
 }
 
 /** Draws parameters of a fit and runs each as far as readings may be taken. */
-export function imaginedReadings(fit: Fit, options: ImagineOptions): ImaginedReadings {
+export function simulatedReadings(fit: Fit, options: SimulateReadingsOptions): SimulatedReadings {
   const { state, draws, replicates, seed, group, periods } = options;
-  const standing = standingOf(fit, { periods, seed, ...(group !== undefined && { group }) });
+  const context = decisionContext(fit, { periods, seed, ...(group !== undefined && { group }) });
   const { scale } = problemOf(fit);
-  const grounds = drawnGrounds(standing, draws);
-  const centres = grounds.map((ground) => Float64Array.from(centralPath(ground).values[state]!, scale.to));
-  const { reading, change } = problemOf(fit).group(standing.fitGround!.group.group).noise;
+  const { grounds, factors } = drawnGrounds(context, draws);
+  // What is read of a state is its factor times it, and every draw has a factor of its own.
+  const factor = (draw: number): number => factors[state]?.[draw] ?? 1;
+  const centres = grounds.map((ground, k) =>
+    Float64Array.from(centralPath(ground).values[state]!, (value) => scale.to(factor(k) * value)),
+  );
+  const { reading, change } = problemOf(fit).group(context.fitGround!.group.group).noise;
   const noise = reading[state];
-  const rows = standing.ground.periods + 1;
+  const rows = context.ground.periods + 1;
   const alone = noise !== undefined && "sd" in noise ? noise.sd / Math.sqrt(replicates) : undefined;
   const scatter =
     alone === undefined
-      ? processScatter(change, standing, grounds, centres, state, scale, randomStream(seed).jump())
+      ? processScatter(change, context, grounds, centres, state, scale, randomStream(seed).jump())
       : new Float64Array(rows).fill(alone);
-  return { standing, grounds, centres, scatter, scale };
+  return { context, grounds, centres, scatter, scale };
 }
 
 /** Scatter of single values around their draw's path, from one noisy run of every draw. */
 function processScatter(
   change: FittedNoise["change"],
-  standing: Standing,
+  context: DecisionContext,
   grounds: readonly Ground[],
   centres: readonly Float64Array[],
   state: number,
@@ -54,7 +58,7 @@ function processScatter(
   stream: RandomStream,
 ): Float64Array {
   const draws = change.map((noise) => noise && noiseDraw(noise));
-  const rows = standing.ground.periods + 1;
+  const rows = context.ground.periods + 1;
   const offsets = Array.from({ length: rows }, () => new Float64Array(grounds.length));
   grounds.forEach((ground, k) => {
     const at = ground.initial.slice();
