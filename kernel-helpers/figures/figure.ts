@@ -20,7 +20,9 @@ export interface Axis {
   readonly ends?: readonly [number, number];
   /** The periods that places on the axis stand for, where these have labels; `zero` is the place of period 0. */
   readonly periods?: {
+    /** Axis of the periods. */
     readonly axis: PeriodAxis;
+    /** Place of period 0. */
     readonly zero: number;
   };
   /**

@@ -17,22 +17,42 @@ import {
 export type Level =
   | number
   | {
+      /** Share of a parameter or of a first value. */
       readonly share: number;
+      /** The parameter or first value, as "K" or "N[0]". */
       readonly of: string;
     }
   | {
+      /** Powers of ten from a parameter or a first value. */
       readonly logs: number;
+      /** The parameter or first value, as "K" or "N[0]". */
       readonly of: string;
     };
 
 /** A level that is to be reached from below (`risesTo`) or from above (`fallsTo`). */
 export type CrossedLevel =
   | {
+      /**
+       * Level that is reached from below, in the unit of the state: a number, or one such as `{ share: 0.9,
+       * of: "K" }` or `{ logs: 6, of: "N[0]" }`.
+       */
       readonly risesTo: Level;
+      /**
+       * Level that is reached from above, in the unit of the state: a number, or one such as `{ share: 0.9,
+       * of: "K" }` or `{ logs: 6, of: "N[0]" }`.
+       */
       readonly fallsTo?: never;
     }
   | {
+      /**
+       * Level that is reached from above, in the unit of the state: a number, or one such as `{ share: 0.9,
+       * of: "K" }` or `{ logs: 6, of: "N[0]" }`.
+       */
       readonly fallsTo: Level;
+      /**
+       * Level that is reached from below, in the unit of the state: a number, or one such as `{ share: 0.9,
+       * of: "K" }` or `{ logs: 6, of: "N[0]" }`.
+       */
       readonly risesTo?: never;
     };
 

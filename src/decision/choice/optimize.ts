@@ -17,7 +17,7 @@ import { solveWithin } from "./solve-within.js";
 
 /** Options of `optimize`. */
 export interface OptimizeOptions extends DecisionOptions {
-  /** A parameter, a first value such as "N[0]", or an input whose usual level is chosen. */
+  /** What is varied: a parameter, a first value such as "N[0]", or an input, whose usual level is set. */
   readonly vary: string;
   /** Lowest and highest value looked at. */
   readonly range: readonly [number, number];
@@ -27,7 +27,7 @@ export interface OptimizeOptions extends DecisionOptions {
   readonly minimize?: Measure;
   /** The setting comes in multiples of this (1 for pieces); only they are tried. */
   readonly multiple?: number;
-  /** Level of the interval; default 0.95. */
+  /** Confidence level of the interval, between 0 and 1; default 0.95. */
   readonly level?: number;
 }
 

@@ -16,6 +16,7 @@ import { leftWords } from "./solve-notes.js";
 
 /** Options of `sensitivity`. */
 export interface SensitivityOptions extends DecisionOptions {
+  /** Measure whose change is wanted. */
   readonly answer: Measure;
   /** Parameters, first values and inputs to move; default what the fit estimates, or all parameters of a rule. */
   readonly vary?: readonly string[];

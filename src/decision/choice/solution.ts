@@ -27,15 +27,15 @@ export type DatedTarget = Extract<Measure, { readonly time: string }> &
 
 /** Options of `solveFor`. */
 export interface SolveOptions extends DecisionOptions {
-  /** A parameter, a first value such as "N[0]", or an input whose usual level is sought. */
+  /** What is varied: a parameter, a first value such as "N[0]", or an input, whose usual level is set. */
   readonly vary: string;
   /** What is to be met: a measure that `is` a value, is `atMost` it or `atLeast` it. */
   readonly until: Target | DatedTarget;
   /** Lowest and highest value looked at; default a hundredth to a hundred times the present one, within its bounds. */
   readonly range?: readonly [number, number];
   /**
-   * The setting comes in multiples of this (0.01 for money, 1 for pieces). With `atMost` and `atLeast` only multiples
-   * are tried, and the first that meets the target is given; with `is` the nearest multiple.
+   * The setting comes in multiples of this (0.01 for money, 1 for pieces); with `atMost` and `atLeast` only
+   * multiples are tried, and the first that meets the target is given, with `is` the nearest multiple.
    */
   readonly multiple?: number;
   /** Confidence level of the interval, between 0 and 1; default 0.95. */

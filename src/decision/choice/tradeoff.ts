@@ -12,7 +12,7 @@ import { leftWords, signNotes } from "./solve-notes.js";
 
 /** Options of `tradeoff`. */
 export interface TradeoffOptions extends DecisionOptions {
-  /** A parameter, a first value such as "N[0]", or an input whose usual level is chosen. */
+  /** What is varied: a parameter, a first value such as "N[0]", or an input, whose usual level is set. */
   readonly vary: string;
   /** Values to look at: a list, or two ends with how many. */
   readonly values:

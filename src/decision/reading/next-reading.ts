@@ -17,8 +17,9 @@ export interface NextReadingOptions extends RunHooks {
   /** Periods beyond the record up to which a reading could be taken, and up to which the answer looks. */
   readonly periods: number;
   /**
-   * Periods at which it could be taken, by number or label: a list, or two ends; default every period after the
-   * record. Periods within the record are looked at only where they are given here, as for samples that were kept.
+   * Periods at which it could be taken, by number or label: a list, or two ends; default every period after
+   * the record, whose own periods are looked at only where they are given here, as for samples that were
+   * kept.
    */
   readonly values?:
     | readonly (number | string)[]
@@ -32,7 +33,7 @@ export interface NextReadingOptions extends RunHooks {
   readonly answer?: Measure;
   /** What is read; default the first state. */
   readonly state?: string;
-  /** Readings taken at the same time; default 1. They count where the error is one of observation. */
+  /** Readings taken at the same time; they count where the error is one of observation; default 1. */
   readonly replicates?: number;
   /**
    * Cost of a reading at a time, in any unit; the gain is then weighed by it; default the same everywhere.

@@ -33,7 +33,10 @@ export interface Cycles {
 export interface CyclesOptions extends HeldSetting {
   /** Periods until the values come round. */
   readonly period: number;
-  /** Default: the rule's bounds, or as far as its parameters and its turns from rising to falling suggest. */
+  /**
+   * Lowest and highest value to look at, for a system by state; default the rule's bounds, or as far as its
+   * parameters and its turns from rising to falling suggest.
+   */
   readonly range?: SearchRange;
 }
 

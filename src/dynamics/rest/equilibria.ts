@@ -38,7 +38,10 @@ export interface Equilibria {
 }
 
 export interface EquilibriaOptions extends HeldSetting {
-  /** Default: the rule's bounds, or as far as its parameters and its turns from rising to falling suggest. */
+  /**
+   * Lowest and highest value to look at, for a system by state; default the rule's bounds, or as far as its
+   * parameters and its turns from rising to falling suggest.
+   */
   readonly range?: SearchRange;
   /** For systems: how many places the search starts from; default 400. */
   readonly searches?: number;
