@@ -2,7 +2,7 @@ import { nearestNames } from "../../src/numeric/index.js";
 import { type Term, termOf, terms } from "../glossary/index.js";
 import { checkCall } from "../options/index.js";
 import { escapeHtml, showing } from "../tables/index.js";
-import { refuseNoTerm, refuseUnknownTerm } from "./refusals.js";
+import { refuseUnknownTerm } from "./refusals.js";
 
 /** A word of the trade, explained; it shows itself. */
 export interface Explanation {
@@ -14,12 +14,11 @@ export interface Explanation {
  * Says what a word of the trade means, and what it is easily taken for.
  *
  * @param name - the term as it is spoken, whatever the case.
- * @throws {ModelError} `no-term`, or `unknown-term` with the nearest ones.
+ * @throws {ModelError} `unknown-term` with the nearest ones.
  * @example explain("fill rate").term.field; // "stock"
  */
 export function explain(name: string): Readonly<Explanation> {
   checkCall("explain", arguments);
-  if (typeof name !== "string" || name.trim() === "") throw refuseNoTerm();
   const known = terms.flatMap((one) => [one.name, ...one.otherNames]);
   const term = termOf(name);
   if (term === undefined) throw refuseUnknownTerm(name, nearestNames(name, known), known);

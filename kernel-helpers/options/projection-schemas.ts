@@ -50,7 +50,7 @@ const error: Value<Noise> = {
 };
 
 const namedSd = required(
-  either(number({ from: 0 }, 0.1), text("s")),
+  either(number({ from: 0 }, 0.1), text("s", "the name of a parameter")),
   "Standard deviation a period: a number or the name of a parameter",
 );
 

@@ -17,12 +17,3 @@ export function noColumns(title: string): ModelError {
     { title },
   );
 }
-
-/** A column may lean only on a key that rows can hold. */
-export function unknownColumnKind(kind: string, key: string, known: readonly string[]): ModelError {
-  return new ModelError(
-    "unknown-column-kind",
-    `Column "${key}" has the kind "${kind}", which no table knows. Known kinds: ${known.join(", ")}.`,
-    { kind, key, known },
-  );
-}

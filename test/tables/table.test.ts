@@ -218,7 +218,7 @@ test.each([
   ],
   [
     () => table({ title: "Levels", columns: [{ key: "n", label: "A", kind: "weight" as never }], rows: [] }),
-    "unknown-column-kind",
+    "option-wrong",
   ],
 ])("a table that cannot be drawn is refused in words", (make, code) => {
   expect(make).toThrowError(expect.objectContaining({ name: "ModelError", code }));
