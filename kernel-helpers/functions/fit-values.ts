@@ -1,8 +1,7 @@
 import { type Fit, type GroupFit, problemOf } from "../../src/estimate/index.js";
 import { labelAt } from "../../src/record/index.js";
 import type { Rule } from "../../src/rule/index.js";
-import { whichGroupError } from "../options/index.js";
-import { groupNamed } from "../results/index.js";
+import { groupNamed, groupRequiredError } from "../results/index.js";
 import { showing } from "../tables/index.js";
 import { escapeHtml, joinSentences, list } from "../wording/index.js";
 import type { Shown } from "./show.js";
@@ -34,8 +33,9 @@ export type ResultFor<Asked extends Subject, Result> = Asked extends Fit ? Resul
 export function groupOf({ groups }: Fit, name: string | undefined): GroupFit {
   if (name !== undefined) return groupNamed("fit", groups, name);
   const [only] = groups;
-  if (only === undefined || groups.length > 1) throw whichGroupError(groups.map(({ group }) => group));
-  return only;
+  const names = groups.map(({ group }) => group);
+  if (groups.length > 1) throw groupRequiredError(names);
+  return only!;
 }
 
 /** Where the trajectory of a fit begins. */

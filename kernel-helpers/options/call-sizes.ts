@@ -51,6 +51,12 @@ export const steppedPeriods: Size = {
   },
 };
 
+/** Exact fractions grow with every period. */
+export const exactPeriods: Size = {
+  option: "periods",
+  bytes: (options, [subject]) => 1000 * count(options["periods"], 0) * ruleOf(subject).states.length,
+};
+
 /** The estimates of every refit. */
 export const keptResamples: Size = {
   option: "resamples",

@@ -1,4 +1,5 @@
 import type { InitialValues } from "../../src/dynamics/index.js";
+import type { AtBound, Bounds } from "../../src/rule/index.js";
 import type { Argument } from "./function-schema.js";
 import {
   either,
@@ -7,8 +8,11 @@ import {
   named,
   number,
   type Option,
+  oneOf,
   optional,
   pairOf,
+  required,
+  shapeOf,
   type Value,
   whole,
 } from "./option.js";
@@ -31,6 +35,23 @@ export const valuesByName = (names?: Role, example = "{ r: 0.5 }"): Value<Readon
   named(number({}, 1), example, names);
 export const limitsByName = (names?: Role): Value<Readonly<Record<string, readonly [number, number]>>> =>
   named(limits, "{ r: [0, 3] }", names);
+/** Limits by name, and of a state also what happens there. */
+export const boundsByName: Value<Readonly<Record<string, Bounds>>> = named(
+  either(
+    limits,
+    shapeOf<Extract<Bounds, { readonly range: unknown }>>(
+      {
+        range: required(limits, "Lowest and highest value of the state"),
+        atBounds: required(
+          oneOf<AtBound>("absorbed", "error"),
+          "What becomes of the state there: it stays at the bound for good, or the path ends",
+        ),
+      },
+      '{ range: [0, 500], atBounds: "absorbed" }',
+    ),
+  ),
+  "{ r: [0, 3] }",
+);
 /** A first value, or first values of a state with lags. */
 export const firstValue: Value<number | readonly number[]> = either(
   number({}, 10),

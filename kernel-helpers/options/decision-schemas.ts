@@ -20,8 +20,7 @@ import {
   valuesByName,
 } from "./common-options.js";
 import type { FunctionSchema } from "./function-schema.js";
-import { crossed, oneLevel } from "./level-schemas.js";
-import { measure, target } from "./measure-schemas.js";
+import { crossed, measure, oneLevel, target } from "./measure-schemas.js";
 import {
   either,
   flag,
@@ -48,10 +47,7 @@ const shared: Schema<Shared> = {
   record: only("rule", startOptions.record),
   group: startOptions.group,
   periods: required(whole(1, 24), "Whole periods ahead"),
-  inputs: optional(
-    plans,
-    "By input: its plan; for a fit the first period ahead comes first, for a rule period 0",
-  ),
+  inputs: optional(plans, "By input: what it will be, by the periods of the record or of the run"),
   parameters: only("rule", optional(valuesByName("parameter"), "Of a rule: its parameters by name")),
   initial: only("rule", optional(firstValues, "Of a rule: its first values by state")),
   noise: only(
@@ -102,9 +98,9 @@ const optimizeOptions: Schema<OptimizeOptions> = {
   ...shared,
   vary,
   range: required(pair, "Lowest and highest value looked at"),
-  multiple: optional(positive, "The setting comes in multiples of this (1 for pieces); only they are tried"),
   maximize: optional(measure, "Measure that is to be as large as can be; give this or `minimize`"),
   minimize: optional(measure, "Measure that is to be as small as can be; give this or `maximize`"),
+  multiple: optional(positive, "The value comes in multiples of this (1 for pieces); only they are tried"),
   level: intervalLevel,
 };
 
@@ -169,7 +165,7 @@ const tradeoffSchema: FunctionSchema = {
 };
 
 const timeToReachOptions: Schema<TimeToReachOptions> = {
-  state: optional(nameOf("measured", "N"), "A state or quantity", "the first state"),
+  state: optional(nameOf("measured", "N"), "Name of a state or quantity", "the first state"),
   ...crossed,
   level: intervalLevel,
   newUnit: optional(

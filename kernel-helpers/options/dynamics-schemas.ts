@@ -14,7 +14,7 @@ import type {
   SearchRange,
   TrajectoryOptions,
 } from "../../src/dynamics/index.js";
-import { steppedPeriods } from "./call-sizes.js";
+import { exactPeriods, steppedPeriods } from "./call-sizes.js";
 import {
   anyNumber,
   firstValues,
@@ -112,7 +112,7 @@ const exactTrajectorySchema: FunctionSchema = {
   takes,
   options: { fields: exactTrajectoryOptions },
   example: 'exactTrajectory(rule, { parameters: { r: "1/2", K: 100 }, initial: { N: 10 }, periods: 6 })',
-  sizes: [steppedPeriods],
+  sizes: [exactPeriods],
 };
 
 const closedFormOptions: Schema<ClosedFormOptions & OfFit> = {

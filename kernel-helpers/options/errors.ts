@@ -158,15 +158,6 @@ export function tooManyArgumentsError(schema: FunctionSchema, value: unknown): M
   );
 }
 
-/** One of several groups was to be named. */
-export function whichGroupError(groups: readonly string[]): ModelError {
-  return new ModelError(
-    "which-group",
-    `The fit has ${groups.length} groups, ${list(groups.map((group) => JSON.stringify(group)))}. Name one: ${inCode(`group: ${JSON.stringify(groups[0])}`)}.`,
-    { groups },
-  );
-}
-
 /** @param of - what the option goes with. */
 export function otherSubjectError(option: string, of: "rule" | "fit"): ModelError {
   const why =

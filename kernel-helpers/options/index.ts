@@ -1,2 +1,1 @@
 export { checkCall } from "./check-call.js";
-export { whichGroupError } from "./errors.js";

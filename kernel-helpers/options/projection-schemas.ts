@@ -9,7 +9,7 @@ import type { ProcessNoise } from "../../src/rule/index.js";
 import { projectedPaths, projectedPeriods } from "./call-sizes.js";
 import { firstValues, fit, onProgress, rule, seed, share, signal, valuesByName } from "./common-options.js";
 import type { FunctionSchema } from "./function-schema.js";
-import { crossed, oneLevel } from "./level-schemas.js";
+import { crossed, oneLevel } from "./measure-schemas.js";
 import {
   either,
   type Fields,
@@ -82,7 +82,7 @@ export const noise: Value<Readonly<Record<string, Noise | ProcessNoise>>> = name
 );
 
 const watched: Schema<Watch> = {
-  state: optional(nameOf("measured", "N"), "A state or quantity", "the first state"),
+  state: optional(nameOf("measured", "N"), "Name of a state or quantity", "the first state"),
   ...crossed,
 };
 
@@ -117,7 +117,7 @@ const forecastOptions: Schema<ForecastOptions> = {
   ),
   inputs: optional(
     plans,
-    "By input: what it will be, the first period ahead first; needed for every input that the record does not hold so far ahead",
+    "By input: what it will be, by the periods of the record, or one plan a group; needed for every input that the record does not hold so far ahead",
   ),
   scenarios: scenarioOption,
   levels,

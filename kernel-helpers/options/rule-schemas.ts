@@ -1,5 +1,5 @@
 import type { RecurrenceOptions, RuleCatalogue } from "../../src/rule/index.js";
-import { firstValue, limits, valuesByName } from "./common-options.js";
+import { boundsByName, firstValue, valuesByName } from "./common-options.js";
 import type { FunctionSchema } from "./function-schema.js";
 import {
   either,
@@ -11,7 +11,6 @@ import {
   pairOf,
   required,
   type Schema,
-  shapeOf,
   text,
   whole,
 } from "./option.js";
@@ -34,16 +33,6 @@ type WithOwn =
 
 const names = listOf(text("C"), '["C"]', 0);
 
-type StateBounds = Exclude<NonNullable<RecurrenceOptions["bounds"]>[string], readonly [number, number]>;
-
-const stateBounds: Schema<StateBounds> = {
-  range: required(limits, "Lower and upper bound, infinite where open"),
-  atBounds: required(
-    oneOf("absorbed", "error"),
-    "Whether a path stays at the bound, or ends there as an error",
-  ),
-};
-
 const namedRuleOptions: Schema<NamedRuleOptions> = {
   name: optional(
     text("crowding"),
@@ -56,11 +45,8 @@ const namedRuleOptions: Schema<NamedRuleOptions> = {
   ),
   units: optional(named(text("EUR"), '{ owed: "EUR" }'), "Unit by name"),
   bounds: optional(
-    named(
-      either(limits, shapeOf(stateBounds, '{ range: [0, 500], atBounds: "error" }')),
-      "{ K: [0, Infinity] }",
-    ),
-    'Lower and upper bound by state or parameter, as in `{ K: [0, Infinity] }`; for a state also what happens there: `{ N: { range: [0, 500], atBounds: "error" } }`',
+    boundsByName,
+    'Lower and upper bound by state or parameter, as in { K: [0, Infinity] }; for a state also what happens there, { N: { range: [0, 500], atBounds: "error" } }',
     "a state is absorbed at a lower bound of 0 (it stays 0), and any other bound is an error of the rule, at which a path ends",
   ),
   start: optional(valuesByName(), "Starting value of a fit, by parameter"),

@@ -31,6 +31,15 @@ export function severalGroupsError(
   );
 }
 
+/** A question that takes the estimates of one group, asked of a fit with several. */
+export function groupRequiredError(names: readonly string[]): ModelError {
+  return new ModelError(
+    "group-required",
+    `This fit has ${names.length} groups: ${listed(names)}. Say which one is meant: \`group: "${names[0]}"\`.`,
+    { groups: names },
+  );
+}
+
 export function unknownGroupError(what: string, name: string, names: readonly string[]): ModelError {
   const known = names.every((each) => each === "")
     ? "It has a single group without a name: leave `.group(...)` out."

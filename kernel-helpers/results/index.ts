@@ -1,3 +1,4 @@
+export { groupRequiredError } from "./errors.js";
 export { type EstimatedValues, type Fit, type GroupFit, withEstimates } from "./fit-shortcuts.js";
 export { groupName, groupNamed } from "./group-named.js";
 export type { ChangePoint, Check, CompareOptions, Proposal, UpdatedFit } from "./holding-fits.js";

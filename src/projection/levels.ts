@@ -17,42 +17,30 @@ import {
 export type Level =
   | number
   | {
-      /** Share of a parameter or of a first value. */
+      /** Share of it. */
       readonly share: number;
-      /** The parameter or first value, as "K" or "N[0]". */
+      /** Parameter or first value that the level is relative to. */
       readonly of: string;
     }
   | {
-      /** Powers of ten from a parameter or a first value. */
+      /** How many powers of ten from it. */
       readonly logs: number;
-      /** The parameter or first value, as "K" or "N[0]". */
+      /** Parameter or first value that the level is relative to. */
       readonly of: string;
     };
 
 /** A level that is to be reached from below (`risesTo`) or from above (`fallsTo`). */
 export type CrossedLevel =
   | {
-      /**
-       * Level that is reached from below, in the unit of the state: a number, or one such as `{ share: 0.9,
-       * of: "K" }` or `{ logs: 6, of: "N[0]" }`.
-       */
+      /** Level that is risen to, from below: a number, or relative to a parameter. */
       readonly risesTo: Level;
-      /**
-       * Level that is reached from above, in the unit of the state: a number, or one such as `{ share: 0.9,
-       * of: "K" }` or `{ logs: 6, of: "N[0]" }`.
-       */
+      /** Level that is fallen to, from above: a number, or relative to a parameter. */
       readonly fallsTo?: never;
     }
   | {
-      /**
-       * Level that is reached from above, in the unit of the state: a number, or one such as `{ share: 0.9,
-       * of: "K" }` or `{ logs: 6, of: "N[0]" }`.
-       */
+      /** Level that is fallen to, from above: a number, or relative to a parameter. */
       readonly fallsTo: Level;
-      /**
-       * Level that is reached from below, in the unit of the state: a number, or one such as `{ share: 0.9,
-       * of: "K" }` or `{ logs: 6, of: "N[0]" }`.
-       */
+      /** Level that is risen to, from below: a number, or relative to a parameter. */
       readonly risesTo?: never;
     };
 

@@ -5,9 +5,9 @@ import type { AtBound } from "./state-bounds.js";
 export type Bounds =
   | readonly [number, number]
   | {
-      /** Lower and upper bound, infinite where open. */
+      /** Lowest and highest value of the state. */
       readonly range: readonly [number, number];
-      /** Whether a path stays at the bound, or ends there as an error. */
+      /** What becomes of the state there: it stays at the bound for good, or the path ends. */
       readonly atBounds: AtBound;
     };
 
@@ -22,12 +22,12 @@ export interface RecurrenceOptions {
   /** Unit by name. */
   readonly units?: Readonly<Record<string, string>>;
   /**
-   * Lower and upper bound by state or parameter, as in `{ K: [0, Infinity] }`; for a state also what happens
-   * there: `{ N: { range: [0, 500], atBounds: "error" } }`; default a state is absorbed at a lower bound of 0
+   * Lower and upper bound by state or parameter, as in { K: [0, Infinity] }; for a state also what happens
+   * there, { N: { range: [0, 500], atBounds: "error" } }; default a state is absorbed at a lower bound of 0
    * (it stays 0), and any other bound is an error of the rule, at which a path ends.
    */
   readonly bounds?: Readonly<Record<string, Bounds>>;
-  /** Starting value of a fit, by parameter. */
+  /** Where a fit starts, by parameter. */
   readonly start?: Readonly<Record<string, number>>;
   /** Parameters held at a value in every fit, by name. */
   readonly fixed?: Readonly<Record<string, number>>;

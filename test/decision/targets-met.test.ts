@@ -103,7 +103,7 @@ test("an answer read from below zero, where no record was, says so", () => {
     periods: 6,
     until: { level: "index", at: 6, is: -50 },
   });
-  expect(solved.sentence).toContain("By year 15 the rule gives index = -50.");
+  expect(solved.sentence).toMatch(/By year 15 the rule gives index = -(49\.9|50\.)/);
   const kept = solveFor(fitted, {
     vary: "landed",
     range: [10, 200],

@@ -25,7 +25,7 @@ export interface OptimizeOptions extends DecisionOptions {
   readonly maximize?: Measure;
   /** Measure that is to be as small as can be; give this or `maximize`. */
   readonly minimize?: Measure;
-  /** The setting comes in multiples of this (1 for pieces); only they are tried. */
+  /** The value comes in multiples of this (1 for pieces); only they are tried. */
   readonly multiple?: number;
   /** Confidence level of the interval, between 0 and 1; default 0.95. */
   readonly level?: number;

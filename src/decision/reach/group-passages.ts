@@ -60,7 +60,7 @@ export function counted(question: GroupQuestion, source: LevelSource, from: numb
 }
 
 /**
- * First passages of every path from a row on, in rows, sorted; infinite for never. They are read from the kept paths of
+ * First passages of every path from a row on, in rows; infinite for never. They are read from the kept paths of
  * the process, or from what was watched where paths were too many to keep.
  */
 export function drawnPassages(group: GroupForecast, question: GroupQuestion, from: number): Float64Array {
@@ -70,7 +70,7 @@ export function drawnPassages(group: GroupForecast, question: GroupQuestion, fro
   if (values === undefined) {
     const watched = group.passages.find((each) => each.state === state && sameLevel(each, question));
     if (watched === undefined) throw notWatchedError(state, question);
-    return watched.at.slice().sort();
+    return watched.at;
   }
   const kept: KeptPaths = { paths, rows: group.index.length, values, passed: passed[place] };
   const curved = smooth && margin === "parameters";
@@ -78,28 +78,23 @@ export function drawnPassages(group: GroupForecast, question: GroupQuestion, fro
   return Float64Array.from({ length: paths }, (_, path) => {
     const at = firstPassage(kept, path, asked, curved);
     return at === undefined ? Number.POSITIVE_INFINITY : at.between;
-  }).sort();
+  });
 }
 
 /** Share of the paths that ended outside their range and had not got there. */
 export function leftShare({ ensemble, left }: GroupForecast, place: number, coming: Float64Array): number {
-  if (!(left > 0)) return 0;
-  const rows = ensemble.periods + 1;
   const last = ensemble.process[place];
+  // Of paths that were not kept it is only known how many have ended.
   if (last === undefined) return left;
-  const ended = share(
-    Float64Array.from({ length: ensemble.paths }, (_, path) => last[path * rows + rows - 1]!),
-    Number.isNaN,
-  );
-  // Those that got there before they ended are no question.
-  return Math.min(
-    ended,
-    share(coming, (at) => at === Number.POSITIVE_INFINITY),
+  const rows = ensemble.periods + 1;
+  return share(
+    coming,
+    (at, path) => at === Number.POSITIVE_INFINITY && Number.isNaN(last[path * rows + rows - 1]!),
   );
 }
 
-export function share(values: Float64Array, holds: (value: number) => boolean): number {
-  return values.reduce((count, value) => count + Number(holds(value)), 0) / values.length;
+export function share(values: Float64Array, holds: (value: number, path: number) => boolean): number {
+  return values.reduce((count, value, path) => count + Number(holds(value, path)), 0) / values.length;
 }
 
 /** A first period at or past the level: its row, its share of the paths, and the share that is there by then. */

@@ -37,8 +37,9 @@ export function groupReach(
   const { paths, central: kept, levels } = group.ensemble;
   const length = group.index.length;
   const central = firstPassage(kept[place]!, 0, counted(question, levels.central, from), question.smooth);
-  const found = drawnPassages(group, question, from);
-  const coming = from === present ? found : drawnPassages(group, question, present);
+  const coming = drawnPassages(group, question, present);
+  const found = (from === present ? coming : drawnPassages(group, question, from)).slice().sort();
+  const recorded = recordedPast(group, question);
   const never = share(coming, (at) => at === Number.POSITIVE_INFINITY);
   const beginsPast = central?.row === from && place < question.of.states.length;
   const rows: Rows = beginsPast
@@ -55,7 +56,7 @@ export function groupReach(
     scenario: group.scenario,
     time: timeOf(group, rows.time),
     firstPeriod: timeOf(group, rows.firstPeriod),
-    recorded: recordedPast(group, question)?.time,
+    recorded: recorded?.time,
     beginsPast,
     withinRecord: rows.time !== undefined && rows.time <= present && present > 0,
     levelAt: levelValues(asked, levels.central)[0]!,
@@ -73,7 +74,7 @@ export function groupReach(
     words: {
       ...wordsOf(group, question, rows),
       likeliest: likeliestWords(group, question.periodUnit, distribution, rows.firstPeriod),
-      recorded: recordedPast(group, question)?.words,
+      recorded: recorded?.words,
     },
   };
 }

@@ -4,7 +4,7 @@ import type { DeltaMargin } from "./delta-margin.js";
 
 /** The question: when does a state rise or fall to a level? */
 export type TimeToReachOptions = CrossedLevel & {
-  /** A state or quantity; default the first state. */
+  /** Name of a state or quantity; default the first state. */
   readonly state?: string;
   /** Confidence level of the interval, between 0 and 1; default 0.95. */
   readonly level?: number;

@@ -31,7 +31,7 @@ import { withinError } from "../words/amount.js";
 export interface DecisionOptions extends StartOptions, RunHooks {
   /** Whole periods ahead. */
   readonly periods: number;
-  /** By input: its plan; for a fit the first period ahead comes first, for a rule period 0. */
+  /** By input: what it will be, by the periods of the record or of the run. */
   readonly inputs?: InputPlans;
   /** Of a fit or a record with several groups: which one. */
   readonly group?: string;
@@ -39,9 +39,9 @@ export interface DecisionOptions extends StartOptions, RunHooks {
   readonly parameters?: Readonly<Record<string, number>>;
   /** Of a rule: its first values by state. */
   readonly initial?: InitialValues;
-  /** Of a rule: random change by state; every measure is then one of the paths' distribution. */
+  /** Of a rule: random change by state, for probabilities. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** Paths where chance has a part; default 4000. */
+  /** Random paths for probabilities and margins; default 2000. */
   readonly paths?: number;
   /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
