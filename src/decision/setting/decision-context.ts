@@ -39,9 +39,9 @@ export interface DecisionOptions extends StartOptions, RunHooks {
   readonly parameters?: Readonly<Record<string, number>>;
   /** Of a rule: its first values by state. */
   readonly initial?: InitialValues;
-  /** Of a rule: random change by state, for probabilities. */
+  /** Of a rule: random change by state; every measure is then one of the paths' distribution. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** Random paths for probabilities and margins; default 2000. */
+  /** Paths where chance has a part; default 4000. */
   readonly paths?: number;
   /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
