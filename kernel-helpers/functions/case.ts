@@ -10,8 +10,8 @@ import {
   untypeset,
 } from "../tables/index.js";
 import { type CaseHead, caseLog, defaultSeed } from "./case-log.js";
-import { cautionOf, type Domain, domainCautions } from "./cautions.js";
-import { refuseEmptyAnswer, refuseNoCase, refuseUnanswered, refuseUnknownDomain } from "./refusals.js";
+import { cautionOf, type Domain } from "./cautions.js";
+import { refuseEmptyAnswer, refuseNoCase, refuseUnanswered } from "./refusals.js";
 import { rerunBlock } from "./rerun-block.js";
 import { type Shown, show } from "./show.js";
 import { shownTogether } from "./shown-together.js";
@@ -33,13 +33,10 @@ export interface CaseOptions {
 /**
  * Opens a case: prints its title and question, and sets the seed that the commands draw with.
  *
- * @throws {ModelError} `unknown-domain`.
  * @example openCase({ title: "Algae line 3", question: "When can it be drawn down?", domain: "cultures", seed: 7 });
  */
 export function openCase(options: CaseOptions): void {
   checkCall("openCase", arguments);
-  const known = Object.keys(domainCautions);
-  if (!known.includes(options.domain)) throw refuseUnknownDomain(options.domain, known);
   const head: CaseHead = { ...options, seed: options.seed ?? defaultSeed };
   caseLog.open(head);
   resetPlotLibrary();

@@ -1,11 +1,4 @@
-import {
-  explanationHtml,
-  explanationText,
-  lookUp,
-  missingTermError,
-  type Term,
-  unknownTermError,
-} from "../glossary/index.js";
+import { explanationHtml, explanationText, lookUp, type Term, unknownTermError } from "../glossary/index.js";
 import { checkCall } from "../options/index.js";
 import { showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
@@ -28,7 +21,6 @@ export interface Explanation {
  */
 export function explain(word: string): Readonly<Explanation> {
   checkCall("explain", arguments);
-  if (typeof word !== "string" || word.trim() === "") throw missingTermError();
   const field = caseLog.head()?.domain;
   const found = lookUp(word, field);
   if (found === undefined) throw unknownTermError(word, field);

@@ -1,13 +1,5 @@
 import { ModelError } from "../../src/numeric/index.js";
 
-export function refuseUnknownDomain(domain: string, known: readonly string[]): ModelError {
-  return new ModelError(
-    "unknown-domain",
-    `A case belongs to one of ${known.join(", ")}; "${domain}" was given. The domain decides which caution is printed.`,
-    { domain, known },
-  );
-}
-
 export function refuseNoCase(command: string): ModelError {
   return new ModelError(
     "no-case-open",

@@ -20,7 +20,7 @@ import {
   valuesByName,
 } from "./common-options.js";
 import type { FunctionSchema } from "./function-schema.js";
-import { level, measure, target } from "./measure-schemas.js";
+import { crossed, measure, oneLevel, target } from "./measure-schemas.js";
 import {
   either,
   flag,
@@ -166,8 +166,7 @@ const tradeoffSchema: FunctionSchema = {
 
 const timeToReachOptions: Schema<TimeToReachOptions> = {
   state: optional(nameOf("measured", "N"), "Name of a state or quantity", "the first state"),
-  risesTo: optional(level, "Level that is risen to, from below: a number, or relative to a parameter"),
-  fallsTo: optional(level, "Level that is fallen to, from above: a number, or relative to a parameter"),
+  ...crossed,
   level: intervalLevel,
   newUnit: optional(
     flag,
@@ -179,7 +178,7 @@ const timeToReachOptions: Schema<TimeToReachOptions> = {
 const timeToReachSchema: FunctionSchema = {
   name: "timeToReach",
   takes: [{ name: "ahead", takes: ["forecast", "simulation"] }],
-  options: { fields: timeToReachOptions, oneOf: [["risesTo", "fallsTo"]] },
+  options: { fields: timeToReachOptions, oneOf: oneLevel },
   example: "timeToReach(forecast(fit, { periods: 24 }), { risesTo: 120 })",
 };
 

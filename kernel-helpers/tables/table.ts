@@ -84,7 +84,7 @@ export interface TableOptions {
  *
  * All texts are escaped. A missing value is shown as an en dash, with a note.
  *
- * @throws {ModelError} `no-columns` | `column-repeated` | `unknown-column-kind`.
+ * @throws {ModelError} `no-columns` | `column-repeated`.
  * @example table({ title: "Levels", columns: [{ key: "n", label: "Week", kind: "integer" }], rows: [{ n: 1 }] });
  */
 export function table(options: TableOptions): Table {

@@ -27,7 +27,7 @@ export interface RecurrenceOptions {
    * (it stays 0), and any other bound is an error of the rule, at which a path ends.
    */
   readonly bounds?: Readonly<Record<string, Bounds>>;
-  /** Where a fit starts, by parameter. */
+  /** Starting value of a fit, by parameter. */
   readonly start?: Readonly<Record<string, number>>;
   /** Parameters held at a value in every fit, by name. */
   readonly fixed?: Readonly<Record<string, number>>;

@@ -218,7 +218,7 @@ test.each([
   ],
   [
     () => table({ title: "Levels", columns: [{ key: "n", label: "A", kind: "weight" as never }], rows: [] }),
-    "unknown-column-kind",
+    "option-wrong",
   ],
 ])("an invalid table is rejected", (make, code) => {
   expect(make).toThrowError(expect.objectContaining({ name: "ModelError", code }));

@@ -39,9 +39,9 @@ export interface DecisionOptions extends StartOptions, RunHooks {
   readonly parameters?: Readonly<Record<string, number>>;
   /** Of a rule: its first values by state. */
   readonly initial?: InitialValues;
-  /** Of a rule: random change by state, for probabilities. */
+  /** Of a rule: random change by state; every measure is then one of the paths' distribution. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** Random paths for probabilities and margins; default 2000. */
+  /** Paths where chance has a part; default 4000. */
   readonly paths?: number;
   /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
@@ -68,14 +68,15 @@ export interface DecisionContext extends MeasureUnits {
   readonly seed: number;
   /** Random numbers of the question, the same at every call: those of a forecast or simulation with this seed. */
   readonly stream: () => RandomStream;
-  /** Called before each run of all paths. */
+  /** Called before each run of the rule. */
   readonly tick: Tick;
   /** The ground under other plans of inputs. */
   readonly planned: (plans: InputPlans) => Ground;
 }
 
-/** Runs of all paths that an answer takes, roughly: one for each place in the range that is looked at. */
-const runs = 100;
+/** Runs that an answer takes, roughly: a place in the range each, and for a fit some at every draw of its parameters. */
+const runsOfRule = 100;
+const runsOfFit = 5000;
 
 /** Whether a subject is a fit. */
 export const isFit = (subject: Fit | Rule): subject is Fit => subject.kind === "fit";
@@ -91,12 +92,13 @@ export function decisionContext(subject: Fit | Rule, options: DecisionOptions): 
     ...own,
     paths: options.paths ?? 4000,
     seed: options.seed ?? 1,
+    tick: ticker(options, isFit(subject) ? runsOfFit : runsOfRule),
     random: own.changeAt(ground.parameters).some((noise) => noise !== undefined),
     levelAt: (level) => levelValues(level, centralLevels(ground))[0]!,
   };
 }
 
-type OwnContext = Omit<DecisionContext, "paths" | "seed" | "random" | "levelAt">;
+type OwnContext = Omit<DecisionContext, "paths" | "seed" | "tick" | "random" | "levelAt">;
 
 function fitContext(fit: Fit, options: DecisionOptions): OwnContext {
   const { rule, observations } = fit;
@@ -125,7 +127,6 @@ function fitContext(fit: Fit, options: DecisionOptions): OwnContext {
         (own) => own.jump(),
         randomStream(options.seed ?? 1),
       ),
-    tick: ticker(options, runs),
     planned,
     unitOf: (name) => {
       const state = stateOf(name);
@@ -171,7 +172,6 @@ function ruleContext(rule: Rule, options: DecisionOptions): OwnContext {
     plans: options.inputs ?? {},
     changeAt: (at) => ruleNoise(rule, at, options.noise),
     stream: () => randomStream(options.seed ?? 1),
-    tick: ticker(options, runs),
     planned,
     unitOf: (name) => rule.units[stateOf(name)] ?? "",
     periodUnit: axis.unit,
