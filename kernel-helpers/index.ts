@@ -56,6 +56,7 @@ export type {
   DensityDependence,
   DensityOptions,
   ProposeOptions,
+  SameParameters,
 } from "../src/evidence/index.js";
 export { ModelError } from "../src/numeric/index.js";
 export type {
@@ -116,6 +117,8 @@ export {
   recurrence,
   rules,
 } from "./functions/rules.js";
+export { sameParameters } from "./functions/same-parameters.js";
+export { loadResult, saveResult } from "./functions/saved.js";
 export { show } from "./functions/show.js";
 export type { Term } from "./glossary/index.js";
 export { type Progress, progress, withProgress } from "./progress/index.js";

@@ -1,5 +1,6 @@
 import type { Fit } from "../../src/estimate/index.js";
 import {
+  type Forecast as EngineForecast,
   type ForecastOptions,
   forecast as forecastFit,
   type SimulateOptions,
@@ -35,6 +36,11 @@ export function forecast(fit: Fit, options: ForecastOptions): Forecast {
     `forecast "${ruleLabel(fit.rule)}" over ${options.periods} periods, ${ahead.options.paths} paths`,
   );
   caseLog.noteForecast(fit);
+  return presentForecast(ahead);
+}
+
+/** Makes a forecast ready for a reader, and the fit that it holds. */
+export function presentForecast(ahead: EngineForecast): Forecast {
   presentFit(ahead.fit);
   return showing(forecastWithValues(ahead), () => shownTogether(showForecast(ahead)));
 }

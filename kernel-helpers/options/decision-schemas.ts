@@ -47,10 +47,7 @@ const shared: Schema<Shared> = {
   record: only("rule", startOptions.record),
   group: startOptions.group,
   periods: required(whole(1, 24), "Whole periods ahead"),
-  inputs: optional(
-    plans,
-    "By input: its plan; for a fit the first period ahead comes first, for a rule period 0",
-  ),
+  inputs: optional(plans, "By input: what it will be, by the periods of the record or of the run"),
   parameters: only("rule", optional(valuesByName("parameter"), "Of a rule: its parameters by name")),
   initial: only("rule", optional(firstValues, "Of a rule: its first values by state")),
   noise: only(

@@ -122,7 +122,14 @@ const densityDependenceSchema: FunctionSchema = {
   example: "densityDependence(observations, { level: 0.95 })",
 };
 
+const sameParametersSchema: FunctionSchema = {
+  name: "sameParameters",
+  takes: [fit],
+  example: "sameParameters(fit)",
+};
+
 export const evidenceSchemas: readonly FunctionSchema[] = [
+  sameParametersSchema,
   checkSchema,
   compareSchema,
   proposeSchema,

@@ -13,7 +13,18 @@ import {
   valuesByName,
 } from "./common-options.js";
 import type { FunctionSchema } from "./function-schema.js";
-import { flag, named, number, oneOf, optional, required, type Schema, text, whole } from "./option.js";
+import {
+  either,
+  flag,
+  named,
+  number,
+  oneOf,
+  optional,
+  required,
+  type Schema,
+  text,
+  whole,
+} from "./option.js";
 
 export const fitOptions: Schema<FitOptions> = {
   errors: required(
@@ -26,8 +37,8 @@ export const fitOptions: Schema<FitOptions> = {
     '"normal"',
   ),
   sd: optional(
-    number({ from: 0 }, 0.1),
-    'Standard deviation of the errors where it is known: in the record\'s unit for "normal", on the log scale for "lognormal" (0.1 for a coefficient of variation of 10%); with `errors: "both"` that of the observation',
+    either(number({ from: 0 }, 0.1), text("sd", "the name of an input column")),
+    'Standard deviation of the errors of a single reading where it is known, one number or the name of an input column that holds one for every row: in the record\'s unit for "normal", on the log scale for "lognormal" (0.1 for a coefficient of variation of 10%); with `errors: "both"` that of the observation',
   ),
   fixed: optional(valuesByName("parameter"), "Parameters held at a value, by name"),
   bounds: optional(
@@ -128,7 +139,23 @@ const estimatesSchema: FunctionSchema = {
 const pointsSchema: FunctionSchema = { name: "points", takes: [fitted], example: "points(fit)" };
 const summarySchema: FunctionSchema = { name: "summary", takes: [fitted], example: "summary(fit)" };
 
+const saveResultSchema: FunctionSchema = {
+  name: "saveResult",
+  takes: [{ name: "result", takes: ["fit", "forecast"] }],
+  example: "saveResult(fit)",
+};
+
+const loadResultSchema: FunctionSchema = {
+  name: "loadResult",
+  takes: [
+    { name: "text", takes: text('{"format": "periodwise result"}', "the text that `saveResult` wrote") },
+  ],
+  example: "loadResult(saveResult(fit))",
+};
+
 export const fitSchemas: readonly FunctionSchema[] = [
+  saveResultSchema,
+  loadResultSchema,
   fitSchema,
   bootstrapSchema,
   gridIntervalSchema,

@@ -118,7 +118,7 @@ const forecastOptions: Schema<ForecastOptions> = {
   ),
   inputs: optional(
     plans,
-    "By input: what it will be, the first period ahead first; needed for every input that the record does not hold so far ahead",
+    "By input: what it will be, by the periods of the record, or one plan a group; needed for every input that the record does not hold so far ahead",
   ),
   scenarios: scenarioOption,
   levels,

@@ -170,15 +170,33 @@ export function refuseJumps(name: string, ruleText: string): ModelError {
   );
 }
 
-export function refuseSd(sd: number, distribution: string): ModelError {
+export function refuseSd(sd: number | string, distribution: string): ModelError {
   const counts = distribution === "poisson" || distribution === "negative-binomial";
   const remedy = counts
     ? `Leave it out: the variance of "${distribution}" counts follows from their mean.`
-    : "Give a positive number: in the unit of the record for `normal`, on the log scale for `lognormal`.";
+    : "Give a positive number, or the name of an input column of them: in the unit of the record for `normal`, on the log scale for `lognormal`.";
   return new ModelError(
     "invalid-sd",
     `Option \`sd\` is ${sd}, with \`distribution: "${distribution}"\`. ${remedy}`,
     { sd, distribution },
+  );
+}
+
+export function refuseSdColumn(column: string, inputs: readonly string[]): ModelError {
+  return new ModelError(
+    "sd-not-recorded",
+    `Option \`sd\` names the column "${column}", which the record does not hold as an input${inputs.length > 0 ? ` (it has ${inputs.join(", ")})` : ""}. ` +
+      `Write observations(..., { inputs: { "${column}": "its column" } }), or give one number, as \`sd: 0.15\`.`,
+    { column, inputs },
+  );
+}
+
+export function refuseSdValue(column: string, group: ObservedGroup, row: number, value: number): ModelError {
+  return new ModelError(
+    "invalid-sd",
+    `Row ${row}${named(group)}: the standard deviation in "${column}" is ${Number.isNaN(value) ? "missing" : value}. Every row with a value needs a ` +
+      "positive one; leave the row out with a reason, or give one number for all, as `sd: 0.15`.",
+    { column, group: group.name, row, value },
   );
 }
 

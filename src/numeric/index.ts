@@ -33,6 +33,7 @@ export {
 } from "./probability/test-distributions.js";
 export { seededWords } from "./probability/xoshiro.js";
 export { type RunHooks, reporter, type Tick, ticker } from "./run-hooks.js";
+export { loadResult, saveResult } from "./saved-result.js";
 export { findRoot, type RootOptions } from "./search/find-root.js";
 export { type LowestValue, minimise } from "./search/minimise.js";
 export { secondDerivatives } from "./search/second-derivatives.js";

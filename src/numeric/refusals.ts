@@ -110,3 +110,26 @@ export function badValue(asked: string, value: unknown): ModelError {
     { value },
   );
 }
+
+export function notSavable(place: string, what: string): ModelError {
+  return new ModelError(
+    "not-savable",
+    `${place} is a ${what}, which cannot be saved. Save results of this package, or plain lists, records and numbers.`,
+    { place, what },
+  );
+}
+
+export function noSavedResult(): ModelError {
+  return new ModelError(
+    "no-saved-result",
+    'The text was not written by `saveResult`. Give the text of a saved result, as `loadResult(await readFile(path, "utf8"))`.',
+  );
+}
+
+export function futureFormat(found: unknown, known: number): ModelError {
+  return new ModelError(
+    "newer-format",
+    `The result was saved in format version ${String(found)}; this version of the package reads up to ${known}. Update the package, or save the result again with this one.`,
+    { found, known },
+  );
+}

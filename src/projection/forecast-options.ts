@@ -16,8 +16,8 @@ export interface ForecastOptions extends RunHooks {
         readonly byGroup: Readonly<Record<string, string | number>>;
       };
   /**
-   * By input: what it will be, the first period ahead first; needed for every input that the record does not
-   * hold so far ahead.
+   * By input: what it will be, by the periods of the record, or one plan a group; needed for every input that
+   * the record does not hold so far ahead.
    */
   readonly inputs?: InputPlans;
   /** Several plans of inputs side by side, by the name of the scenario, run with the same random numbers. */

@@ -58,10 +58,22 @@ function startedEarlier({ ground, period }: WarningSource): Warning[] {
 }
 
 function openParameters({ group, starts }: WarningSource): Warning[] {
-  const open = group.estimates.filter((estimate) => estimate.standardError === undefined);
-  if (open.length === 0) return [];
-  const names = open.map((estimate) => estimate.name).join(", ");
+  const open = group.estimates.filter(({ standardError }) => standardError === undefined);
+  const parameters = open.filter(({ role }) => role !== "scale");
+  const names = parameters.map(({ name }) => name).join(", ");
+  const spreads = open.filter(({ role }) => role === "scale").map(({ name }) => name);
+  const held: Warning[] =
+    spreads.length === 0
+      ? []
+      : [
+          {
+            code: "spreads-held",
+            message: `The record determines ${spreads.join(" and ")} only on one side: the bands hold ${spreads.length === 1 ? "it" : "them"} at the estimate${group.filter ? "; they rest on both errors together, which the record determines better than either" : ""}.`,
+          },
+        ];
+  if (parameters.length === 0) return held;
   return [
+    ...held,
     {
       code: "parameters-not-determined",
       message: `The record does not determine ${names}: parameters were drawn ${starts.method}${starts.followed === undefined ? "" : ` of ${starts.followed}`}, and where the bands have no end the record gives none.`,

@@ -78,12 +78,14 @@ export function refuseTwoPlans(): ModelError {
   );
 }
 
-export function refuseUndetermined(group: string, names: readonly string[]): ModelError {
+/** @param twoErrors - whether the fit looks for an observation error as well, which can be given. */
+export function refuseUndetermined(group: string, names: readonly string[], twoErrors: boolean): ModelError {
   const who = names.length === 0 ? "The parameters" : names.join(" and ");
+  const held = `Hold one, as \`fixed: { ${names[0] ?? "r"}: 0.5 }\`, ${twoErrors ? "give the observation error where it is known, as `sd: 0.15`, " : ""}or use a rule with fewer parameters.`;
   return new ModelError(
     "parameters-not-separated",
     `${who}${group === "" ? "" : ` of "${group}"`} cannot be separated by this record, so no margin can be put on a ` +
-      "projection. Hold one with { fixed }, or use a rule with fewer parameters.",
+      `projection. ${held}`,
     { group, names },
   );
 }

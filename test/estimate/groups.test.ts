@@ -67,6 +67,37 @@ describe("groups of a record", () => {
     expect(width(mixed)).toBeLessThan(width(apart));
   });
 
+  // Source: Kass and Steffey (1989): the variance of a group's own value is that with the mean known, plus the mean's own
+  // variance times the square of the share with which the group follows it. For a straight line with a level of each
+  // group's own both are closed forms of X'X.
+  test("mixed: a group's standard error carries the uncertainty of the population's mean", () => {
+    const stream = randomStream(17);
+    const lines = Object.fromEntries(
+      [0.8, 1.1, 1.5, 0.9, 1.2].map((slope, g) => [
+        `line ${g + 1}`,
+        { x: Array.from({ length: 6 + g }, (_, t) => 10 * g + slope * t + 0.5 * stream.normal()) },
+      ]),
+    );
+    const mixed = fit(recurrence("x[t+1] = x + c"), record(lines), {
+      errors: "observation",
+      groups: "mixed",
+    });
+    const [mean, spread, sigma] = ["c", "between-group sd of c", "sigma"].map((name) =>
+      population(mixed, name),
+    );
+    for (const group of mixed.groups) {
+      const n = group.count;
+      const sums = { tt: ((n - 1) * n * (2 * n - 1)) / 6, t: ((n - 1) * n) / 2 };
+      const weight = 1 / spread!.value ** 2;
+      // Inverse of [tt/s^2 + 1/spread^2, t/s^2; t/s^2, n/s^2], its first entry.
+      const s2 = sigma!.value ** 2;
+      const [a, b, d] = [sums.tt / s2 + weight, sums.t / s2, n / s2];
+      const known = d / (a * d - b * b);
+      const whole = known + (known * weight * mean!.standardError!) ** 2;
+      expect(Math.abs(group.estimates[0]!.standardError! / Math.sqrt(whole) - 1)).toBeLessThan(1e-5);
+    }
+  });
+
   test("too few groups for a population, and counts together, are refused", () => {
     const two = record(cultures(2, 1.5, 0.02, 8));
     expect(() => fit(sheltered, two, { ...options, groups: "mixed" })).toThrow(

@@ -69,12 +69,3 @@ test.each(["normal", "lognormal"] as const)(
     }
   },
 );
-
-test("parameters that run away together are not determined, and no interval of theirs closes beside the estimate", () => {
-  const [group] = fit(recurrence(own), stock(["catch"]), trajectory).groups;
-  const open = group!.warnings.filter(({ code }) => code === "not-determined").map(({ message }) => message);
-  expect(open.join(" ")).toContain(
-    "K is not determined by this record (its best value lies beyond any limit).",
-  );
-  expect(open.join(" ")).toContain("r is not determined by this record (no upper limit:");
-});

@@ -103,7 +103,7 @@ test("names that the rule does not have", () => {
 
 test("spreads and factors that no fit has", () => {
   expect(said(sheltered, grown, { ...trajectory, sd: -1 })).toMatchInlineSnapshot(
-    `"Option \`sd\` is -1, with \`distribution: "normal"\`. Give a positive number: in the unit of the record for \`normal\`, on the log scale for \`lognormal\`."`,
+    `"Option \`sd\` is -1, with \`distribution: "normal"\`. Give a positive number, or the name of an input column of them: in the unit of the record for \`normal\`, on the log scale for \`lognormal\`."`,
   );
   expect(said(sheltered, grown, { errors: "both", distribution: "poisson" })).toMatchInlineSnapshot(
     `"Option \`distribution\` must be "normal", "lognormal", "poisson" or "negative-binomial"; poisson with errors in both was given. Counts go with \`errors: "process"\` or \`errors: "observation"\`."`,

@@ -65,7 +65,8 @@ describe("errors in both the process and the observation", () => {
     const read = x.map((value) => value + 0.4 * stream.normal());
     const { filter, warnings } = fit(rule, record({ x: read }), { errors: "both" }).groups[0]!;
     const { check } = filter!;
-    expect(Math.abs(check!.particles - check!.filter)).toBeLessThan(4 * check!.deviation + 0.1);
+    expect(check).toMatchObject({ lost: 0, of: 4 });
+    expect(Math.abs(check!.particles! - check!.filter)).toBeLessThan(4 * check!.deviation! + 0.1);
     expect(warnings.map(({ code }) => code)).not.toContain("filter-rough");
   });
 

@@ -33,19 +33,23 @@ async function make(): Promise<Readonly<Record<string, unknown>>> {
     { hour: [...yeast.keys()], density: [...yeast] },
     { period: "hour", step: { every: 1, of: "hour" }, value: "density" },
   );
-  const flasks = observations(
-    {
-      hour: [...yeast.keys(), ...yeast.keys()],
-      density: [...yeast, ...yeast.map((value, i) => value * (i % 2 === 0 ? 1.02 : 0.99))],
-      flask: [...yeast.map(() => "A"), ...yeast.map(() => "B")],
-    },
-    { period: "hour", step: { every: 1, of: "hour" }, by: "flask", value: "density" },
-  );
   const crowding = recurrence("ΔN = r*N*(1 - N/K)");
   const sheltered = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)");
   const crowdingFit = fit(crowding, counts, { errors: "observation" });
   const shelteredFit = fit(sheltered, counts, { errors: "observation" });
   const fitted = shelteredFit;
+  const flasks = observations(
+    {
+      flask: ["A", "A", "A", "A", "A", "A", "B", "B", "B", "B", "B", "B", "C", "C", "C", "C", "C", "C"],
+      hour: [0, 1, 2, 3, 4, 5, 0, 1, 2, 3, 4, 5, 0, 1, 2, 3, 4, 5],
+      N: [10, 12.4, 14.1, 17.9, 20.6, 25.4, 20, 23.1, 29.4, 33.9, 42.5, 49.8, 5, 5.9, 7.6, 8.4, 10.7, 12.2],
+    },
+    { period: "hour", step: "hour", by: "flask", value: "N" },
+  );
+  const flasksFit = fit(recurrence("N[t+1] = R*N"), flasks, {
+    errors: "observation",
+    distribution: "lognormal",
+  });
   const ahead = forecast(fitted, { periods: 12 });
   const ready = timeToReach(ahead, { risesTo: 600 });
   return {
@@ -58,6 +62,7 @@ async function make(): Promise<Readonly<Record<string, unknown>>> {
     crowdingFit,
     shelteredFit,
     fitted,
+    flasksFit,
     ahead,
     ready,
   };

@@ -70,7 +70,13 @@ const results = await new Stryker({
 rmSync(join(root, scratch), { recursive: true, force: true });
 
 const valid = results.filter(({ status }) => status !== "RuntimeError" && status !== "CompileError");
-const undetected = valid.filter(({ status }) => status === "Survived" || status === "NoCoverage");
+// A change that keeps test files from loading leaves tests out, none of which then fails.
+const everyTest = Math.max(...valid.map(({ testsCompleted = 0 }) => testsCompleted));
+const undetected = valid.filter(
+  (result) =>
+    result.status === "NoCoverage" ||
+    (result.status === "Survived" && !(result.static && result.testsCompleted < everyTest)),
+);
 for (const result of undetected.sort(inReadingOrder)) console.log(describe(result));
 const detected = valid.length - undetected.length;
 const score = ((100 * detected) / valid.length).toFixed(1);

@@ -1,6 +1,7 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
 import { leastSquares, minimiseSquares, squaresWorkspace } from "../../src/numeric/index.js";
+import { holdAtBounds } from "../../src/numeric/least-squares/bounded-step.js";
 import { predictedReduction, slopeAlong } from "../../src/numeric/least-squares/linear-model.js";
 import { trustRegionStep } from "../../src/numeric/least-squares/trust-region-step.js";
 
@@ -362,6 +363,49 @@ describe("minimiseSquares", () => {
     const stopped = minimiseSquares(line(), Float64Array.of(0), { reach: 1e-3, iterationLimit: 2 });
     expect(stopped.stop).toEqual({ kind: "iteration-limit" });
     expect(stopped.evaluations).toBe(3);
+  });
+
+  test("takes scales from the lengths of the columns, which never shrink", () => {
+    const workspace = squaresWorkspace(1);
+    minimiseSquares(line(), Float64Array.of(0), { workspace });
+    expect(workspace.scale[0]).toBeCloseTo(Math.sqrt(5), 14);
+    // One residual c^2 - 4 from 9: its slope 2c falls from 18 to 4.
+    const triangle = Float64Array.of(18);
+    const projected = Float64Array.of(77);
+    const parabola = {
+      size: 1,
+      triangle,
+      projected,
+      evaluate: ([c]: Float64Array): number => (c! * c! - 4) ** 2,
+      linearise([c]: Float64Array): boolean {
+        triangle[0] = 2 * c!;
+        projected[0] = c! * c! - 4;
+        return true;
+      },
+    };
+    close([minimiseSquares(parabola, Float64Array.of(9), { workspace }).estimates[0]], [2], 1e-12);
+    expect(workspace.scale[0]).toBe(18);
+  });
+
+  // By hand: R'z = [2, 1 + 6]; the sum falls towards lower values of both, so a lower bound of theirs binds, no upper one.
+  test("holds what sits on a bound with the sum falling outwards", () => {
+    const workspace = squaresWorkspace(2);
+    const [triangle, projected] = [Float64Array.of(2, 1, 0, 3), Float64Array.of(1, 2)];
+    const at = Float64Array.of(5, 7);
+    const open = { lower: Float64Array.of(-9, -9), upper: Float64Array.of(9, 9) };
+    const held = (bounds: typeof open): number[] => {
+      const count = holdAtBounds(workspace, triangle, projected, at, bounds);
+      expect(count).toBe(2 - workspace.held.filter((each) => each === 1).length);
+      return [...workspace.held];
+    };
+    expect(held(open)).toEqual([0, 0]);
+    expect([...workspace.gradient]).toEqual([2, 7]);
+    expect(held({ ...open, lower: Float64Array.of(-9, 7) })).toEqual([0, 1]);
+    expect(held({ ...open, lower: Float64Array.of(5, -9) })).toEqual([1, 0]);
+    expect(held({ ...open, upper: at })).toEqual([0, 0]);
+    projected.set([-1, -2]);
+    expect(held({ ...open, upper: Float64Array.of(9, 7) })).toEqual([0, 1]);
+    expect(held({ ...open, lower: at })).toEqual([0, 0]);
   });
 
   test("takes one bound alone, on either side, and a start outside it", () => {

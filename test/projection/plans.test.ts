@@ -193,3 +193,10 @@ test("a missed period with an input is a step like any other: the sum of payment
     expect(Math.abs(value)).toBeLessThan(0.2);
   }
 });
+
+test("a step that no pair of rows spans once is warned of in the fit", () => {
+  const table = tableOf({ time: [0, 900, 1800, 2700, 3600, 4500], N: [1, 1.13, 1.3, 1.47, 1.66, 1.9] });
+  const record = observations(table, { period: "time", step: { every: 15, of: "minute" }, value: "N" });
+  const { warnings } = fit(recurrence("N[t+1] = R*N"), record, { errors: "process" });
+  expect(warnings.map(({ code }) => code)).toContain("step-at-odds");
+});

@@ -120,6 +120,7 @@ describe("a distribution", () => {
     ["exponential", [4], -1, Number.POSITIVE_INFINITY],
     ["lognormal", [0, 1], -1, Number.POSITIVE_INFINITY],
     ["f", [1, 7], -1, Number.POSITIVE_INFINITY],
+    ["f", [0.5, 0.1], -1, Number.POSITIVE_INFINITY],
     ["t", [3], Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY],
     ["normal", [0, 1], Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY],
     ["beta", [0.5, 0.5], -0.1, 1.1],
@@ -323,6 +324,15 @@ describe("the distributions of test statistics", () => {
   // Source: Wichura (1988), Algorithm AS 241, Applied Statistics 37:477, test value -9.262340089798408, from memory.
   test("have the normal quantile with all its digits in the far tail", () => {
     near(normalQuantile(1e-20), -9.26234008979841, 1e-15);
+  });
+
+  // Source: mpmath 1.3.0 with 40 digits: the values with 2^-40 above them; 1 - 2^-40 is held exactly.
+  test("have far upper quantiles with all their digits", () => {
+    const probability = 1 - 2 ** -40;
+    near(normalQuantile(probability), 7.047700256664409, 1e-13);
+    near(chiSquareQuantile(probability, 1), 51.030335667497305, 1e-13);
+    near(studentQuantile(probability, 10), 40.92058256173976, 1e-13);
+    near(fQuantile(probability, 2, 17), 213.33530750731484, 1e-13);
   });
 
   // Source: mpmath 1.3.0, erfc and exp with 40 digits.

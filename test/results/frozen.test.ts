@@ -26,6 +26,7 @@ const {
   forecast,
   gridInterval,
   leastSquares,
+  loadResult,
   lyapunovExponent,
   matrixGrowth,
   nextReading,
@@ -37,6 +38,8 @@ const {
   propose,
   recurrence,
   rules,
+  sameParameters,
+  saveResult,
   sensitivity,
   simulate,
   solveFor,
@@ -61,6 +64,7 @@ const others = [
   "openCase",
   "progress",
   "readRecord",
+  "saveResult",
   "rolling",
   "shift",
   "show",
@@ -86,6 +90,9 @@ const fitted = fit(crowding, counts, { errors: "observation" });
 const growth = fit(rules.gompertz(), counts, { errors: "observation" });
 const stepwise = fit(crowding, counts, { errors: "process" });
 const ahead = forecast(fitted, { periods: 4, paths: 50 });
+const flask = levels.flatMap(() => ["A", "B"]);
+const inFlasks = { flask, hour: levels.flatMap((_, i) => [i, i]), N: levels.flatMap((N) => [N, 2 * N]) };
+const flasks = fit(crowding, observations(inFlasks, { ...hourly, by: "flask" }), { errors: "observation" });
 
 const results: Readonly<Record<string, () => unknown>> = {
   attractor: () =>
@@ -150,6 +157,8 @@ const results: Readonly<Record<string, () => unknown>> = {
       values: [90, 110],
       answers: { left: { level: "owed", at: 12 } },
     }),
+  loadResult: () => loadResult(saveResult(ahead)),
+  sameParameters: () => sameParameters(flasks),
   trajectory: () => trajectory(crowding, { parameters, initial: { N: 10 }, periods: 4 }),
   updateFit: () => updateFit(fitted, later),
 };

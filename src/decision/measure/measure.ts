@@ -24,7 +24,10 @@ interface Quantile {
  * Where chance has a part, a measure is its mean over the paths (a time its median), or the `quantile` asked for.
  */
 export type Measure =
-  | ({ readonly level: string; readonly at: number } & Quantile)
+  | ({
+      readonly level: string;
+      readonly at: number;
+    } & Quantile)
   | ({ readonly average: string } & Window & Quantile)
   | ({ readonly total: string } & Window & Quantile)
   | ({ readonly lowest: string } & Window & Quantile)

@@ -31,7 +31,7 @@ import { withinError } from "../words/amount.js";
 export interface DecisionOptions extends StartOptions, RunHooks {
   /** Whole periods ahead. */
   readonly periods: number;
-  /** By input: its plan; for a fit the first period ahead comes first, for a rule period 0. */
+  /** By input: what it will be, by the periods of the record or of the run. */
   readonly inputs?: InputPlans;
   /** Of a fit or a record with several groups: which one. */
   readonly group?: string;

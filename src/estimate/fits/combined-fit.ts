@@ -36,7 +36,7 @@ export function combinedFit(rule: Rule, groups: readonly ObservedGroup[], option
   if (usable.length < groups.length) throw refuseNoStart(groups[0]!, rule.text);
   const begun = usable.map((points) => joinedStart(points[0]!, starts, maps, rows.size));
   const cutAt = (sum: number): ReturnType<typeof cutOf> => cutOf(sum, rows.count, rows.size, options);
-  const objective = squaresObjective(normalEquations(rows));
+  const objective = squaresObjective(normalEquations(rows), rows);
   const found = optimum(objective, all, begun, cutAt, options.intervals !== "none");
   const level = options.level ?? 0.95;
   const left = rows.count - rows.size;
@@ -93,6 +93,7 @@ function partOf(found: Optimum, map: Int32Array, size: number): Optimum {
     ),
     determined: pick(found.determined),
     separable: pick(found.separable),
+    unbounded: Int8Array.from(map, (place) => found.unbounded[place]!),
     rivals: found.rivals.map((rival) => ({
       ...rival,
       estimates: gather(rival.estimates, map, new Float64Array(own)),

@@ -30,9 +30,9 @@ export function commonParameters(
   const free = own.reduce((sum, { names }) => sum + names.length, 0);
   const more = free - together.free;
   if (more < 1 || parts.some(({ rows }) => rows.count <= rows.size)) return undefined;
-  const apart = parts.reduce((sum, { system }, g) => {
+  const apart = parts.reduce((sum, { system, rows }, g) => {
     const { lower, upper } = own[g]!;
-    return sum + squaresObjective(system).minimise(starts[g]!, lower, upper).value;
+    return sum + squaresObjective(system, rows).minimise(starts[g]!, lower, upper).value;
   }, 0);
   const rise = Math.max(0, together.sumOfSquares - apart);
   if (together.knownSd)

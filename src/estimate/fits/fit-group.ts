@@ -1,6 +1,6 @@
 import type { ObservedGroup } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
-import { checkGroup } from "../options/check-group.js";
+import { checkGroup, checkRecorded } from "../options/check-group.js";
 import type { FitOptions } from "../options/fit-options.js";
 import type { Search } from "../problem/search.js";
 import { kindOf, searchOf } from "../problem/search-of.js";
@@ -46,5 +46,6 @@ export function fitGroups(rule: Rule, groups: readonly ObservedGroup[], options:
     return { groups: apart, criteria: addedCriteria(apart.map(({ criteria }) => criteria!)) };
   }
   if (groups.some((group) => kindOf(rule, group, options) !== "least-squares")) throw refuseTogether(how);
+  for (const group of groups) checkRecorded(rule, group, options);
   return how === "combined" ? combinedFit(rule, groups, options) : mixedFit(rule, groups, options);
 }

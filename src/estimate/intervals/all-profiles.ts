@@ -13,19 +13,15 @@ const rounds = 3;
  * limit the fit is done once more from the starts and from the ends of the other profiles. Where a point lies beyond a
  * limit, or a search at it comes out lower, the profile is followed on from there.
  *
- * @param known - which unknowns the record determines at the optimum itself.
  * @param isLast - whether to go on where a profile has found a better optimum, after which the others are of no use.
  */
-export function allProfiles(
-  problem: ProfileProblem,
-  known: readonly boolean[],
-  isLast: boolean,
-): readonly Profile[] {
-  const spacings = known.map((each, i) => spacingOf(problem, i, each));
+export function allProfiles(problem: ProfileProblem, isLast: boolean): readonly Profile[] {
+  const spacings = problem.separable.map((_, i) => spacingOf(problem, i));
   const profiles: Profile[] = [];
   const found = (): boolean => !isLast && profiles.some(({ better }) => better !== undefined);
-  for (let i = 0; i < known.length && !found(); i++) profiles.push(profileInterval(problem, i, spacings[i]!));
-  for (let round = 0; round < rounds && !found(); round++) {
+  for (let i = 0; i < spacings.length && !found(); i++)
+    profiles.push(profileInterval(problem, i, spacings[i]!));
+  for (let round = 0; round < rounds && !found() && problem.effort.left > 0; round++) {
     const inside = [...within(problem), ...profiles.flatMap((profile) => profile.inside)];
     const ends = profiles.flatMap((_, i) => outermost(inside, i));
     const seeds = profiles.map((profile, i) => [
@@ -66,15 +62,12 @@ function within({ objective, others, value, cut, variance }: ProfileProblem): re
   return others.filter((other) => objective.value(other) - value < cut * variance);
 }
 
-/** A first distance from the estimate: where a parabola meets the cut, else a tenth of the unknown's own size. */
-function spacingOf(
-  { covariance, estimates, cut, starts }: ProfileProblem,
-  i: number,
-  known: boolean,
-): number {
-  const own = Math.max(Math.abs(estimates[i]!), Math.min(...starts.map((start) => Math.abs(start[i]!))));
+/** A first distance from the estimate: where a parabola meets the cut, but no farther than half the unknown's own size. */
+function spacingOf({ covariance, estimates, cut, starts, separable }: ProfileProblem, i: number): number {
+  const sizes = starts.map((start) => Math.abs(start[i]!)).sort((a, b) => a - b);
+  const own = Math.max(Math.abs(estimates[i]!), sizes[sizes.length >> 1]!) || 1;
   const reach = Math.sqrt(covariance[i * estimates.length + i]! * cut);
-  return known && reach > 0 && Number.isFinite(reach) ? reach : 0.1 * own || 1;
+  return separable[i] && reach > 0 ? Math.min(reach, own / 2) : own / 10;
 }
 
 /** The points that lie farthest beyond the limits of an unknown, at most one on a side. */

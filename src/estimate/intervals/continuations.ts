@@ -54,7 +54,6 @@ function carried(
   return ways;
 }
 
-function withinBounds(start: Float64Array, { within }: ProfileProblem, i: number): Float64Array {
-  const { lower, upper } = within;
+function withinBounds(start: Float64Array, { lower, upper }: ProfileProblem, i: number): Float64Array {
   return start.map((value, k) => (k === i ? value : Math.min(Math.max(value, lower[k]!), upper[k]!)));
 }

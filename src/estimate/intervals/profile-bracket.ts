@@ -11,9 +11,16 @@ const leastDoublings = 8;
 const precision = 1e-9;
 /** Values whose ratio is larger are compared on the scale of their logarithms. */
 const farApart = 4;
-/** Each step towards 0 where the profile is followed there, and how many are taken. */
-const shrink = 1e-3;
-const shrinks = 8;
+/** Each step towards 0 where the profile is followed there, how many are taken, and what counts as level there. */
+const shrink = 0.01;
+const shrinks = 10;
+const levelStep = 0.01;
+
+/** Careful steps: the first and the least as a share of the distance, how many, and how many times the distance is enough. */
+const firstStep = 1e-3;
+const leastStep = 1e-6;
+const steps = 100;
+const farEnough = 256;
 
 /** One side of a profile. */
 export interface Way {
@@ -32,11 +39,16 @@ export interface Bracket {
   readonly outside: ProfilePoint;
 }
 
+/** The bracket of a side, and the highest excess met on or beyond it. */
+export interface Reached extends Bracket {
+  readonly highest: number;
+}
+
 /**
  * The places at doubling distances between which the cut is passed for good, and the highest excess met beyond: until
  * it is firm, the bound is reached, or the profile stays level.
  */
-export function outward(walk: ProfileWalk, way: Way): (Bracket & { readonly highest: number }) | undefined {
+export function outward(walk: ProfileWalk, way: Way): Reached | undefined {
   const met: ProfilePoint[] = [outermost(walk, way)];
   let level = 0;
   for (const { value, made } of placesBeyond(way, met[0]!.value)) {
@@ -45,6 +57,38 @@ export function outward(walk: ProfileWalk, way: Way): (Bracket & { readonly high
     met.push(here);
     if (here.excess >= way.firm || (level >= levelDoublings && made >= leastDoublings)) break;
   }
+  return reachedBy(met);
+}
+
+/**
+ * The places between which the cut is passed, by steps that grow as long as a search can follow them and shrink where
+ * it cannot: along a narrow curved valley a doubled distance leads out of it. Undefined where the cut is not passed.
+ */
+export function carefully(walk: ProfileWalk, way: Way, from: ProfilePoint): Reached | undefined {
+  const { estimate, bound, root } = way;
+  const direction = Math.sign(way.spacing);
+  const first = Math.abs(from.value - estimate);
+  const met = [from];
+  let step = firstStep * first;
+  for (let k = 0; k < steps && !isOver(met, way, first); k++) {
+    const here = met[met.length - 1]!;
+    const free = here.value + direction * step;
+    const next = walk.at(direction > 0 ? Math.min(free, bound) : Math.max(free, bound));
+    const isFollowed = next.excess - here.excess < root || step < leastStep * first;
+    step *= isFollowed ? 2 : 0.25;
+    if (isFollowed) met.push(next);
+  }
+  return reachedBy(met);
+}
+
+/** Whether careful steps have left the cut for good, met the bound, or gone far enough. */
+function isOver(met: readonly ProfilePoint[], { estimate, bound, firm }: Way, first: number): boolean {
+  const { value, excess } = met[met.length - 1]!;
+  return excess >= firm || value === bound || Math.abs(value - estimate) >= farEnough * first;
+}
+
+/** The last two neighbours on both sides of the cut; undefined where the last point lies within it. */
+function reachedBy(met: readonly ProfilePoint[]): Reached | undefined {
   const last = met.map(({ excess }) => excess < 0).lastIndexOf(true);
   const outside = met[last + 1];
   return outside && { inside: met[last]!, outside, highest: Math.max(...met.map(({ excess }) => excess)) };
@@ -86,18 +130,19 @@ export function narrowed(walk: ProfileWalk, { root }: Way, bracket: Bracket): Br
   for (let k = 1; k <= shrinks && level < 2; k++) {
     const next = walk.at(inside.value * shrink ** k);
     if (next.excess >= 0) return { inside: here, outside: next };
-    level = Math.abs(next.excess - here.excess) < flat * root ? level + 1 : 0;
+    level = Math.abs(next.excess - here.excess) < levelStep * root ? level + 1 : 0;
     here = next;
   }
-  return zero.excess - here.excess < flat * root ? { inside: here, outside: zero } : undefined;
+  return zero.excess - here.excess < levelStep * root ? { inside: here, outside: zero } : undefined;
+}
+
+/** The value at which a profile meets its cut, or at which it jumps over it: then that of the point inside. */
+export interface Crossing extends Bracket {
+  readonly value: number;
 }
 
 /** The value inside a bracket at which the profile meets its cut, by Newton's iteration kept between its ends. */
-export function crossing(
-  walk: ProfileWalk,
-  { estimate }: Way,
-  { inside, outside }: Bracket,
-): Bracket & { readonly value: number } {
+export function crossing(walk: ProfileWalk, { estimate }: Way, { inside, outside }: Bracket): Crossing {
   const byLogarithm = Math.abs(Math.log(outside.value / inside.value)) > Math.log(farApart);
   let [low, high] = [inside, outside];
   let best = Math.abs(high.excess) < Math.abs(low.excess) ? high : low;

@@ -1,5 +1,5 @@
-import { crossing, narrowed, outward, type Way } from "./profile-bracket.js";
-import { type ProfileProblem, type ProfileWalk, profileWalk } from "./profile-walk.js";
+import { type Crossing, carefully, crossing, narrowed, outward, type Way } from "./profile-bracket.js";
+import { type ProfilePoint, type ProfileProblem, type ProfileWalk, profileWalk } from "./profile-walk.js";
 
 /** A profile: its limits, and the places it was computed at for a plot. */
 export interface Profile {
@@ -19,6 +19,8 @@ export interface Profile {
 
 /** How closely the profile must meet its cut at a limit, as a share of the cut's root. */
 const met = 1e-4;
+/** A rise over half the way to a jump that makes it a limit, as a share of the cut's root. */
+const level = 0.01;
 /** Times that a side is walked again from a lower point found at its limit. */
 const rounds = 8;
 
@@ -78,7 +80,9 @@ function side(
     firm: Math.sqrt(problem.firmCut) - root,
   };
   const found =
-    estimate === bound || problem.unbounded[i] === direction ? undefined : limitOn(walk, way, rounds);
+    estimate === bound || problem.unbounded[i] === direction
+      ? undefined
+      : limitOn(walk, way, problem.separable[i]!);
   if (found === undefined) {
     const where = Number.isFinite(bound) ? `before the bound ${bound}` : "from this record";
     return { limit: undefined, firm: false, note: `no ${name} limit ${where}` };
@@ -87,19 +91,58 @@ function side(
   return { ...found, note };
 }
 
+/** The limit on one side; undefined where there is none. */
 function limitOn(
   walk: ProfileWalk,
   way: Way,
-  left: number,
+  jumpsCount: boolean,
 ): { readonly limit: number; readonly firm: boolean } | undefined {
-  const reached = outward(walk, way);
-  const bracket = reached && narrowed(walk, way, reached);
-  if (bracket === undefined) return undefined;
-  const { value, inside, outside } = crossing(walk, way, bracket);
-  // Where the profile jumps, a search that went astray is looked for just outside, else at the limit itself.
-  const jumps = value === inside.value && outside.excess - inside.excess > met * way.root;
+  let reached = outward(walk, way);
+  for (let round = 0; reached !== undefined; round++) {
+    const bracket = narrowed(walk, way, reached);
+    if (bracket === undefined) return undefined;
+    const end = endOf(walk, way, crossing(walk, way, bracket));
+    if (!end.isPassed || round === rounds)
+      return isTelling(walk, way, end, jumpsCount)
+        ? { limit: end.value, firm: reached.highest >= way.firm }
+        : undefined;
+    reached = end.jumps ? carefully(walk, way, end.checked) : outward(walk, way);
+  }
+  return undefined;
+}
+
+/** Where a profile leaves its cut, and the point at which that was checked. */
+interface End {
+  readonly value: number;
+  readonly inside: ProfilePoint;
+  readonly outside: ProfilePoint;
+  readonly checked: ProfilePoint;
+  /** Whether the profile jumps over its cut there, as where the rule breaks down. */
+  readonly jumps: boolean;
+  /** Whether the check came out lower, so that the profile goes on. */
+  readonly isPassed: boolean;
+}
+
+/** Where the profile jumps, a search that went astray is looked for just outside, else at the limit itself. */
+function endOf(walk: ProfileWalk, { root }: Way, { value, inside, outside }: Crossing): End {
+  const jumps = value === inside.value && outside.excess - inside.excess > met * root;
   const checked = walk.at(jumps ? outside.value : value, true);
-  const isPassed = checked.excess < (jumps ? 0 : -met * way.root);
-  if (isPassed && left > 0) return limitOn(walk, way, left - 1);
-  return { limit: value, firm: reached!.highest >= way.firm };
+  return { value, inside, outside, checked, jumps, isPassed: checked.excess < (jumps ? 0 : -met * root) };
+}
+
+/**
+ * Whether an end is a limit. A jump of an unknown that others make up for says only that the search could not follow
+ * them, one from a level stretch that numbers became too large, and a rise because another unknown was stopped short says
+ * nothing either.
+ */
+function isTelling(
+  walk: ProfileWalk,
+  { estimate, root }: Way,
+  { value, outside, jumps, inside }: End,
+  jumpsCount: boolean,
+): boolean {
+  if (outside.isHeldBack) return false;
+  if (!jumps) return true;
+  const halfway = walk.at((estimate + value) / 2);
+  return jumpsCount && inside.excess - halfway.excess > level * root;
 }

@@ -1,5 +1,5 @@
-import type { Lowest, Objective } from "../search/objective.js";
-import { holding, type SearchBounds, searchFrom } from "../search/search-bounds.js";
+import type { Objective } from "../search/objective.js";
+import { holding, type SearchBounds, type SearchEnd, searchFrom } from "../search/search-bounds.js";
 import { continuations } from "./continuations.js";
 
 /** What a profile starts from: the optimum, and where its cut lies. */
@@ -23,6 +23,10 @@ export interface ProfileProblem {
   readonly others: readonly Float64Array[];
   /** Where the searches for the optimum began, tried at a limit. */
   readonly starts: readonly Float64Array[];
+  /** False for an unknown that moves along some direction without effect on the record at the optimum. */
+  readonly separable: readonly boolean[];
+  /** Evaluations that may still be spent on looking for lower points where a search seems to have got stuck. */
+  readonly effort: { left: number };
   /** Critical value of the increase. */
   readonly cut: number;
   /** The critical value that must be passed on both sides for the unknown to count as determined. */
@@ -38,6 +42,8 @@ export interface ProfilePoint {
   /** Root of the increase minus root of the cut, and its slope. */
   readonly excess: number;
   readonly slope: number;
+  /** Whether another unknown was stopped short of a lower point. */
+  readonly isHeldBack: boolean;
 }
 
 export interface ProfileWalk {
@@ -50,7 +56,7 @@ export interface ProfileWalk {
 }
 
 /** A fall below the optimum that counts, in units of the variance. */
-const fall = 1e-5;
+const fall = 1e-4;
 
 /**
  * Refits with unknown i held, each continued from the points already met beside it.
@@ -64,13 +70,15 @@ export function profileWalk(
 ): ProfileWalk {
   const { variance, cut, estimates } = problem;
   const root = Math.sqrt(cut);
-  const points: ProfilePoint[] = [{ value: estimates[i]!, estimates, increase: 0, excess: -root, slope: 0 }];
+  const points: ProfilePoint[] = [
+    { value: estimates[i]!, estimates, increase: 0, excess: -root, slope: 0, isHeldBack: false },
+  ];
   let better: Float64Array | undefined;
-  const visited = (value: number, { lowest, slope }: HeldLowest): ProfilePoint => {
+  const visited = (value: number, { lowest, slope, isHeldBack }: HeldLowest): ProfilePoint => {
     const rise = lowest.value - problem.value;
     const at = lowest.estimates;
     if (!Number.isFinite(rise))
-      return { value, estimates: at, increase: Infinity, excess: Infinity, slope: 0 };
+      return { value, estimates: at, increase: Infinity, excess: Infinity, slope: 0, isHeldBack };
     if (rise < -fall * variance) better = at;
     const increase = Math.max(0, rise) / variance;
     const height = Math.sqrt(increase);
@@ -80,6 +88,7 @@ export function profileWalk(
       increase,
       excess: height - root,
       slope: slope / (2 * variance * height),
+      isHeldBack,
     };
     return keep(points, point);
   };
@@ -100,8 +109,7 @@ function keep(points: ProfilePoint[], point: ProfilePoint): ProfilePoint {
 }
 
 /** Where a search with one unknown held ended. */
-export interface HeldLowest {
-  readonly lowest: Lowest;
+export interface HeldLowest extends SearchEnd {
   /** Of the objective by the unknown held. */
   readonly slope: number;
 }
@@ -118,40 +126,47 @@ function continued(
   const { value: height, stop } = first.lowest;
   const within = height <= problem.value + problem.cut * problem.variance;
   const settled = stop.kind === "converged" && stop.test === "gradient";
-  if (within && settled && !everyStart) return first;
+  if ((within && settled && !everyStart) || problem.effort.left < 0) return first;
   // A search that got stuck would make the interval too narrow: outside the cut, other starts are tried as well.
   const further = everyStart || !settled ? [...near.slice(1), ...problem.others] : problem.others;
   if (further.length === 0) return first;
   return lowestHeld(problem, [first.lowest.estimates, ...further], i, value);
 }
 
-const nowhere: Lowest = {
-  estimates: new Float64Array(0),
-  value: Number.POSITIVE_INFINITY,
-  stop: { kind: "failed", reason: "no point from which to search" },
-  evaluations: 0,
+const nowhere: SearchEnd = {
+  lowest: {
+    estimates: new Float64Array(0),
+    value: Number.POSITIVE_INFINITY,
+    stop: { kind: "failed", reason: "no point from which to search" },
+    evaluations: 0,
+  },
+  isHeldBack: false,
 };
 
 /** The lowest end of searches from several points, with unknown i held. */
 export function lowestHeld(
-  { objective, lower, upper, within, variance }: ProfileProblem,
+  problem: ProfileProblem,
   starts: readonly Float64Array[],
   i: number,
   value: number,
 ): HeldLowest {
-  const admitted = holding({ lower, upper }, i, value);
-  const near = holding(within, i, value);
-  const search = (from: Float64Array): Lowest => searchFrom(objective, from, admitted, near, () => variance);
-  let lowest = nowhere;
+  const { objective, variance } = problem;
+  const admitted = holding(problem, i, value);
+  const near = holding(problem.within, i, value);
+  const enough = Number.isFinite(problem.cut) ? problem.value + problem.cut * variance : undefined;
+  const search = (from: Float64Array): SearchEnd =>
+    searchFrom(objective, from, admitted, near, () => variance, enough);
+  let best = nowhere;
   let last = nowhere;
   for (const start of starts) {
     if (start.length === 0) continue;
     const from = start.slice();
     from[i] = value;
     last = search(from);
-    if (last.value < lowest.value) lowest = last;
+    problem.effort.left -= last.lowest.evaluations;
+    if (last.lowest.value < best.lowest.value) best = last;
   }
   // The slope is that where the last search ended.
-  if (last !== lowest) lowest = search(lowest.estimates);
-  return { lowest, slope: Number.isFinite(lowest.value) ? objective.slope(i) : 0 };
+  if (last !== best) best = search(best.lowest.estimates);
+  return { ...best, slope: Number.isFinite(best.lowest.value) ? objective.slope(i) : 0 };
 }

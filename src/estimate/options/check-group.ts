@@ -7,6 +7,8 @@ import {
   refuseNoChange,
   refuseNoCount,
   refuseNoLogarithm,
+  refuseSdColumn,
+  refuseSdValue,
   refuseTooFew,
 } from "../refusals.js";
 import { recordedPairs } from "../rows/recorded-pairs.js";
@@ -17,7 +19,13 @@ import { type FitOptions, onLogScale } from "./fit-options.js";
 /** Refuses a group from which no honest fit can come. */
 export function checkGroup(rule: Rule, group: ObservedGroup, options: FitOptions, unknowns: Unknowns): void {
   checkNumber(rule, group, options, unknowns.names);
+  checkRecorded(rule, group, options);
+}
+
+/** Refuses values, inputs and limits of which no fit can make anything, whether the group is fitted by itself or not. */
+export function checkRecorded(rule: Rule, group: ObservedGroup, options: FitOptions): void {
   checkInputs(rule, group, options);
+  checkSd(group, options);
   for (const state of rule.states) {
     checkState(group, state, options);
     checkCensoring(group, state);
@@ -41,6 +49,15 @@ function checkInputs(rule: Rule, group: ObservedGroup, options: FitOptions): voi
       for (let at = period + earliest; at <= period + latest; at++)
         if (!Number.isFinite(column[at])) throw refuseInputGap(name, group, at);
   });
+}
+
+/** A column of standard deviations holds a positive one in every row. */
+function checkSd(group: ObservedGroup, { sd }: FitOptions): void {
+  if (typeof sd !== "string") return;
+  const column = group.inputs[sd];
+  if (column === undefined) throw refuseSdColumn(sd, Object.keys(group.inputs));
+  const bad = column.findIndex((each) => !(each > 0 && Number.isFinite(each)));
+  if (bad >= 0) throw refuseSdValue(sd, group, group.rows[bad]!, column[bad]!);
 }
 
 /** The periods from which the fit takes a step. */

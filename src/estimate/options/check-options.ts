@@ -29,5 +29,6 @@ function checkDistribution({ errors, distribution = "normal", sd }: FitOptions):
   if (errors === "both" && counts) throw refuseUnknownDistribution(`${distribution} with errors in both`);
   if (sd === undefined) return;
   const exact = sd === 0 && errors === "both";
-  if (counts || !(sd > 0 || exact)) throw refuseSd(sd, distribution);
+  const usable = typeof sd === "string" || sd > 0 || exact;
+  if (counts || !usable) throw refuseSd(sd, distribution);
 }

@@ -1,3 +1,4 @@
+import { useSentences } from "../result/fit-use.js";
 import type { GroupFit } from "../result/group-fit.js";
 import type { FitOptions } from "./fit-options.js";
 
@@ -11,6 +12,10 @@ export function conventionsOf(options: FitOptions, groups: readonly GroupFit[]):
     intervalSentence(options, groups),
     ...(options.robust === true ? [robustSentence] : []),
     ...groupSentence(options),
+    ...useSentences(
+      groups.map(({ used }) => used),
+      { steps: options.errors !== "observation", counts: isCounts(options) },
+    ),
     ...(options.factor === undefined
       ? []
       : ["The record reads a state up to a factor, which counts as an unknown."]),
@@ -18,7 +23,11 @@ export function conventionsOf(options: FitOptions, groups: readonly GroupFit[]):
 }
 
 const robustSentence =
-  "Values more than 1.345 robust standard deviations off count for less (Huber's weights); errors and intervals take the weights as given.";
+  "Values more than 1.345 robust standard deviations off count for less (Huber's weights); standard errors and intervals by Huber's formula, sigma that of all residuals, so that a future value may lie as far off.";
+
+function isCounts({ distribution }: FitOptions): boolean {
+  return distribution === "poisson" || distribution === "negative-binomial";
+}
 
 function errorSentence({ errors }: FitOptions): string {
   if (errors === "observation")
@@ -37,21 +46,29 @@ function filterSentence({ method, start, check }: NonNullable<GroupFit["filter"]
     start === "stationary"
       ? "the first reading is taken from the rule's long-run distribution (stationary start)"
       : "the first reading is taken as read and left out of the likelihood (diffuse start)";
-  const checked =
-    check === undefined
-      ? ""
-      : ` Log-likelihood ${check.filter.toFixed(2)}, by particles ${check.particles.toFixed(2)} (sd ${check.deviation.toFixed(2)}).`;
-  return `${filter}; ${first}.${checked}`;
+  return `${filter}; ${first}.${checkSentence(check)}`;
 }
 
-function distributionSentence({ distribution = "normal", sd }: FitOptions): string {
+function checkSentence(check: NonNullable<GroupFit["filter"]>["check"]): string {
+  if (check === undefined) return "";
+  const { filter, particles, deviation, lost, of } = check;
+  if (particles === undefined)
+    return ` Particles could not check the filter: in ${lost} of ${of} runs none of them came near some reading, as where readings have almost no error.`;
+  const runs = lost > 0 ? `, ${lost} of ${of} runs lost` : "";
+  return ` Log-likelihood ${filter.toFixed(2)}, by particles ${particles.toFixed(2)} (sd ${deviation!.toFixed(2)}${runs}).`;
+}
+
+function distributionSentence({ distribution = "normal", sd, errors }: FitOptions): string {
   const scale = distribution === "lognormal" ? " on the log scale" : "";
-  if (sd !== undefined) return `Normal errors${scale} of the known standard deviation ${sd}.`;
+  const whose = errors === "both" ? "observation errors" : "errors";
+  if (typeof sd === "string")
+    return `Normal ${whose}${scale} of known standard deviations, column "${sd}"; a future reading has their root mean square.`;
+  if (sd !== undefined) return `Normal ${whose}${scale} of the known standard deviation ${sd}.`;
   switch (distribution) {
     case "lognormal":
-      return "Spread proportional to the level: normal errors on the log scale.";
+      return "Scatter proportional to the level: normal errors on the log scale.";
     case "normal":
-      return "Spread parameter at every level: normal errors.";
+      return "The same scatter at every level: normal errors.";
     case "poisson":
       return "Counts: variance equal to the mean (Poisson).";
     case "negative-binomial":

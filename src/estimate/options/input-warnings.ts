@@ -4,8 +4,14 @@ import type { Rule } from "../../rule/index.js";
 import type { FitOptions } from "./fit-options.js";
 
 /** Recorded inputs that the rule takes for parameters, or does not read at all: the commonest slip with inputs. */
-export function inputWarnings(rule: Rule, { inputs }: Observations, { fixed = {} }: FitOptions): Warning[] {
-  const unread = inputs.filter((input) => !rule.inputs.includes(input) && !Object.hasOwn(fixed, input));
+export function inputWarnings(
+  rule: Rule,
+  { inputs }: Observations,
+  { fixed = {}, sd }: FitOptions,
+): Warning[] {
+  const unread = inputs.filter(
+    (input) => !rule.inputs.includes(input) && !Object.hasOwn(fixed, input) && input !== sd,
+  );
   return unread.map((input) =>
     rule.parameters.includes(input)
       ? { code: "input-taken-as-parameter", message: takenAsParameter(rule, input) }

@@ -4,6 +4,7 @@ import type { FitOptions } from "../options/fit-options.js";
 import { criteria } from "../result/criteria.js";
 import type { FitRows } from "../rows/fit-rows.js";
 import { cutOf } from "../search/cut.js";
+import type { Objective } from "../search/objective.js";
 import { squaresObjective } from "../search/squares-objective.js";
 import { startingPoints } from "../search/starting-points.js";
 import { normalEquations } from "../systems/normal-equations.js";
@@ -29,8 +30,8 @@ export function leastSquaresSearch(rule: Rule, group: ObservedGroup, options: Fi
     scale,
     unknowns,
     rows,
-    objective: squaresObjective(system),
-    part: (first, end) => squaresObjective(normalEquations(partOfRows(rows, first, end))),
+    objective: squaresObjective(system, rows),
+    part: (first, end) => partObjective(partOfRows(rows, first, end)),
     starts: () => startingPoints(rule, group, options, unknowns, whole),
     cutAt: (sum) => cutOf(sum, rows.count, rows.size, options),
     measures: (_, value) => ({ criteria: criteria(value, rows, options), sigma: undefined, exact: true }),
@@ -39,6 +40,10 @@ export function leastSquaresSearch(rule: Rule, group: ObservedGroup, options: Fi
     disturbed: (at, errors) => make(at, (fitted, i) => from(to(fitted) + errors[i]!)),
     draw: (at, sigma, stream) => make(at, (fitted, i) => family.draw(fitted, rows.roots[i]!, sigma, stream)),
   };
+}
+
+function partObjective(rows: FitRows): Objective {
+  return squaresObjective(normalEquations(rows), rows);
 }
 
 /** Some of the compared values of a fit, one after another. */

@@ -88,8 +88,9 @@ export function robustSearch(rule: Rule, group: ObservedGroup, options: FitOptio
 
 function robustObjective({ rows, unknowns }: Search, scale: RobustScale): Objective {
   const roots = new Float64Array(rows.count).fill(1);
-  const weighted = squaresObjective(normalEquations(weightedRows(rows, roots)));
-  const unweighted = squaresObjective(normalEquations(rows));
+  const counted = weightedRows(rows, roots);
+  const weighted = squaresObjective(normalEquations(counted), counted);
+  const unweighted = squaresObjective(normalEquations(rows), rows);
   const weigh = (at: Float64Array): void => {
     rows.prepare(at, false);
     for (let i = 0; i < rows.count; i++) roots[i] = Math.sqrt(weightOf(rows.residualAt(i), scale.sigma));

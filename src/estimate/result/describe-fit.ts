@@ -8,6 +8,7 @@ import { place, type Unknowns } from "../unknowns/unknowns.js";
 import type { Criteria } from "./criteria.js";
 import { estimatesOf } from "./estimate-of.js";
 import { fitPoints } from "./fit-points.js";
+import { fitUse } from "./fit-use.js";
 import { fitWarnings } from "./fit-warnings.js";
 import type { GroupFit } from "./group-fit.js";
 
@@ -48,6 +49,7 @@ export function describeFit(
     cut: found.cut.cut,
     stop: found.stop,
     points,
+    used: fitUse(rule, group, points),
     rivals: found.rivals.map(({ estimates, value }) => ({
       estimates: Array.from(estimates),
       behind: (value - found.value) / found.cut.variance / 2,

@@ -1,6 +1,6 @@
 import type { Warning } from "../../numeric/index.js";
 import { nonsmoothCalls, type Rule } from "../../rule/index.js";
-import type { FitOptions } from "../options/fit-options.js";
+import { type FitOptions, onLogScale } from "../options/fit-options.js";
 import type { Optimum } from "../search/optimum.js";
 import type { Unknowns } from "../unknowns/unknowns.js";
 import { correlationWarnings } from "./correlation-warnings.js";
@@ -25,7 +25,7 @@ export function fitWarnings(fit: Omit<GroupFit, "warnings">, context: FitContext
   return [
     ...stopWarning(fit),
     ...undetermined(fit, context),
-    ...spreadsNotSeparated(fit),
+    ...spreadsNotSeparated(fit, onLogScale(context.options)),
     ...atBounds(fit, context.unknowns),
     ...rivals(fit),
     ...correlationWarnings(fit),
@@ -55,7 +55,8 @@ function undetermined(fit: Omit<GroupFit, "warnings">, { found }: FitContext): W
       ? `only a combination of ${together.map(({ name }) => name).join(" and ")} enters`
       : "no value of it changes the fit";
   const reason = (each: Estimate): string => {
-    if (hasRunOff(fit, each.value)) return "its best value lies beyond any limit";
+    const towards = found.unbounded[fit.estimates.indexOf(each)]!;
+    if (towards * each.value > 0) return "it has no finite optimum";
     return together.includes(each) ? combination : each.profile.note || "its profile has no limit";
   };
   return loose.map((each) => ({
@@ -65,7 +66,7 @@ function undetermined(fit: Omit<GroupFit, "warnings">, { found }: FitContext): W
 }
 
 /** The split of process and observation error, or a dispersion, that the record leaves open. */
-function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">): Warning[] {
+function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">, logScale: boolean): Warning[] {
   const loose = fit.estimates.filter((each) => each.role === "scale" && each.standardError === undefined);
   if (loose.length === 0) return [];
   const limits = loose.map(
@@ -76,25 +77,13 @@ function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">): Warning[] {
     {
       code: both ? "errors-not-separated" : "not-determined",
       message: both
-        ? `The record separates the two errors only weakly (${limits.join("; ")}). If replicates tell the standard deviation of a reading, give it as { sd: 0.1 }.`
+        ? `The record separates the two errors only weakly (${limits.join("; ")}). Where the standard deviation of a reading is known, from replicates or a survey's error, give it: \`sd: 0.15\`${logScale ? " on the log scale (a coefficient of variation of 15%)" : ", in the record's unit"}.`
         : `The record gives no two-sided interval: ${limits.join("; ")}.`,
     },
   ];
 }
 
 const shown = (limit: number | undefined, none: string): string => limit?.toPrecision(3) ?? none;
-
-/** Parameters this many times beyond every value of the record, and beyond 1, have run off. */
-const runaway = 1e6;
-
-function hasRunOff(fit: Omit<GroupFit, "warnings">, value: number): boolean {
-  const most = fit.points.reduce((high, { observed }) => Math.max(high, Math.abs(observed)), 1);
-  return Math.abs(value) > runaway * most;
-}
-
-function valueShown(fit: Omit<GroupFit, "warnings">, value: number): string {
-  return hasRunOff(fit, value) ? "beyond any limit" : value.toPrecision(4);
-}
 
 function atBounds(fit: Omit<GroupFit, "warnings">, unknowns: Unknowns): Warning[] {
   return fit.estimates
@@ -108,7 +97,7 @@ function atBounds(fit: Omit<GroupFit, "warnings">, unknowns: Unknowns): Warning[
 function rivals(fit: Omit<GroupFit, "warnings">): Warning[] {
   if (fit.rivals.length === 0) return [];
   const told = fit.rivals.map(({ estimates, behind }) => {
-    const values = estimates.map((value, i) => `${fit.estimates[i]!.name} ${valueShown(fit, value)}`);
+    const values = estimates.map((value, i) => `${fit.estimates[i]!.name} ${value.toPrecision(4)}`);
     return `${values.join(", ")} (${behind.toFixed(2)} log-likelihood units behind)`;
   });
   return [

@@ -3,6 +3,7 @@ import type { Filtered } from "../state-space/filtered.js";
 import type { Criteria } from "./criteria.js";
 import type { Estimate } from "./estimate-of.js";
 import type { FitPoint } from "./fit-points.js";
+import type { FitUse } from "./fit-use.js";
 import type { Overdispersion } from "./overdispersion.js";
 
 /** The fit of one group of a record. */
@@ -28,6 +29,8 @@ export interface GroupFit {
   readonly cut: number;
   readonly stop: StopReason;
   readonly points: readonly FitPoint[];
+  /** What of the record was used, and how it weighed. */
+  readonly used: FitUse;
   /** Other optima within 2 log-likelihood units: their estimates, and by how much they lie behind. */
   readonly rivals: readonly { readonly estimates: readonly number[]; readonly behind: number }[];
   /** Of a fit with both kinds of error. */

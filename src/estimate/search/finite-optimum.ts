@@ -2,12 +2,15 @@ import { profileWalk } from "../intervals/profile-walk.js";
 import type { Lowest, Objective } from "./objective.js";
 import { isStopped, type SearchBounds } from "./search-bounds.js";
 
-/** A rise of the objective over a decade that does not count, in units of the variance. */
-const negligible = 1e-6;
-/** Decades over which the objective must stay level before an unknown counts as run off, and decades looked at. */
-const levelDecades = 2;
-const decades = 12;
-/** Unknowns that change by more than this factor over a decade go along. */
+/** A rise of the objective that does not count, in units of the variance. */
+const negligible = 1e-5;
+/** By how much an unknown is led outwards, and back in each step. */
+const outwards = 10;
+const back = 4;
+/** Steps back over which the objective must stay level before an unknown counts as run off, and steps taken. */
+const levelSteps = 2;
+const steps = 20;
+/** Unknowns that change by more than this factor on the way go along. */
 const goesAlong = 2;
 
 /** An optimum that may lie beyond any limit, taken at values where the objective stops falling. */
@@ -19,8 +22,8 @@ export interface FiniteOptimum {
 
 /**
  * Takes an optimum that a search followed towards infinity back to where the objective begins to rise. Each unknown that
- * is known worse than its own size is led by decades, the others at their best: outwards, where nothing may rise, and
- * back; where the first decades back bring no rise and a later one does, it had run off.
+ * is known worse than its own size is led away, the others at their best: outwards, where nothing may rise, and back; where
+ * the first steps back bring no rise and a later one does, it had run off.
  *
  * @returns the lowest value with the point led back to, which explains the record as well.
  * @param errors - standard errors; NaN where there is none.
@@ -41,14 +44,14 @@ export function finiteOptimum(
   let at = best;
   for (const i of loose) {
     if (unbounded[i] !== 0) continue;
-    const back = ledBack(objective, at, admitted, within, variance, i);
-    if (back === undefined) continue;
-    const ratios = at.estimates.map((value, k) => value / back.inner[k]!);
+    const found = ledBack(objective, at, admitted, within, variance, i);
+    if (found === undefined) continue;
+    const ratios = at.estimates.map((value, k) => value / found.inner[k]!);
     ratios.forEach((ratio, k) => {
       if (Math.abs(Math.log(ratio)) > Math.log(goesAlong))
         unbounded[k] = Math.sign(at.estimates[k]!) * (ratio > 1 ? 1 : -1);
     });
-    at = { ...at, estimates: back.level };
+    at = { ...at, estimates: found.level };
   }
   return { best: at, unbounded };
 }
@@ -67,26 +70,33 @@ function ledBack(
     objective,
     estimates,
     value: best.value,
-    ...admitted,
+    // Nothing is let out beyond where the search ended: a rise because another unknown is stopped is told by that.
+    ...within,
     within,
     unbounded: new Int8Array(estimates.length),
     variance,
     covariance: new Float64Array(estimates.length ** 2).fill(Number.NaN),
     others: [],
     starts: [],
+    separable: [],
+    effort: { left: Number.POSITIVE_INFINITY },
     cut: Number.POSITIVE_INFINITY,
     firmCut: Number.POSITIVE_INFINITY,
   };
   const walk = profileWalk(problem, i);
-  const farther = 10 * estimates[i]!;
+  const farther = outwards * estimates[i]!;
   const inReach = farther > within.lower[i]! && farther < within.upper[i]!;
-  if (inReach && walk.at(farther).increase > negligible) return undefined;
+  const rise = inReach ? walk.at(farther).increase : 0;
+  // Where the rule breaks down for a number too large, nothing is told of what lies before.
+  if (rise > negligible && Number.isFinite(rise)) return undefined;
   const stopped = isStopped(estimates[i]!, i, admitted, within);
   let level = estimates;
-  for (let k = 1; k <= decades; k++) {
-    const here = walk.at(estimates[i]! / 10 ** k);
-    if (here.increase > negligible)
-      return stopped || k > levelDecades ? { level, inner: here.estimates } : undefined;
+  for (let k = 1; k <= steps; k++) {
+    const here = walk.at(estimates[i]! / back ** k);
+    if (here.increase > negligible) {
+      const other = here.estimates.some((value, j) => j !== i && isStopped(value, j, admitted, within));
+      return (stopped || k > levelSteps) && !other ? { level, inner: here.estimates } : undefined;
+    }
     level = here.estimates;
   }
   return undefined;

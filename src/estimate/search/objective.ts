@@ -16,8 +16,16 @@ export interface Lowest {
 export interface Objective {
   readonly size: number;
   readonly value: (at: Float64Array) => number;
-  /** Searches from a start; unknowns with equal bounds are held there. */
-  readonly minimise: (start: Float64Array, lower: Float64Array, upper: Float64Array) => Lowest;
+  /**
+   * Searches from a start; unknowns with equal bounds are held there. A search that stops short is taken up again by
+   * other means, unless it has come as low as `enough`.
+   */
+  readonly minimise: (
+    start: Float64Array,
+    lower: Float64Array,
+    upper: Float64Array,
+    enough?: number,
+  ) => Lowest;
   /** Slope of the value by unknown i where the last search ended. */
   readonly slope: (i: number) => number;
   /** Inverse of half the second derivatives at the optimum; times `variance` it is the covariance. */

@@ -6,7 +6,7 @@ import type { Cut } from "./cut.js";
 import { finiteOptimum } from "./finite-optimum.js";
 import type { Lowest, Objective } from "./objective.js";
 import { otherEnds, rivalOptima } from "./rival-optima.js";
-import { type SearchBounds, searchBounds, searchFrom } from "./search-bounds.js";
+import { including, type SearchBounds, searchBounds, searchFrom } from "./search-bounds.js";
 
 /** The optimum of an objective, how well its unknowns are known, and others nearly as low. */
 export interface Optimum {
@@ -32,6 +32,8 @@ export interface Optimum {
 const tries = 5;
 /** Times that the fit is done again because a profile found a lower optimum. */
 const repeats = 4;
+/** Evaluations spent on profiles before nothing more is done about searches that get stuck: many times the usual. */
+const mostEvaluations = 50_000;
 /** How far beyond the optimum its profiles look for other unknowns that have none. */
 const pastUnbounded = 100;
 
@@ -45,9 +47,11 @@ export function optimum(
 ): Optimum {
   const tried = starts.slice(0, tries);
   const within = searchBounds(unknowns, tried);
+  const varianceAt = (value: number): number => cutAt(value).variance;
   const search = (start: Float64Array): Lowest =>
-    searchFrom(objective, start, unknowns, within, (value) => cutAt(value).variance);
+    searchFrom(objective, start, unknowns, including(start, within, unknowns), varianceAt).lowest;
   let searches = tried.map(search);
+  const effort = { left: mostEvaluations };
   for (let repeat = 0; ; repeat++) {
     const { unscaled, ...found } = lowestOf(objective, searches, unknowns, within, cutAt);
     const { at, value, cut } = found;
@@ -65,11 +69,14 @@ export function optimum(
       covariance: found.covariance,
       others: otherEnds(at, searches),
       starts: tried,
+      separable: unscaled.determined,
+      effort,
       ...cut,
     };
-    const profiles = allProfiles(problem, unscaled.determined, repeat === repeats);
+    const isLast = repeat === repeats || effort.left < 0;
+    const profiles = allProfiles(problem, isLast);
     const better = profiles.find((profile) => profile.better !== undefined)?.better;
-    if (better === undefined || repeat === repeats) {
+    if (better === undefined || isLast) {
       const determined = unscaled.determined.map((known, i) => known && profiles[i]!.firm);
       return { ...base, profiles, determined };
     }
@@ -89,7 +96,7 @@ function lowestOf(
   within: SearchBounds,
   cutAt: (value: number) => Cut,
 ): FoundOptimum {
-  const lowest = searches.reduce((low, next) => (next.value < low.value ? next : low));
+  const lowest = searches.reduce((low, next) => (low.value <= next.value ? low : next));
   const known = (at: Lowest): Omit<FoundOptimum, "at" | "value" | "stop" | "unbounded"> => {
     const cut = cutAt(at.value);
     const unscaled = objective.covariance(at.estimates);

@@ -8,9 +8,8 @@ export interface SearchBounds {
 
 /** How far beyond its middle start an unknown is looked for: farther out, rounding decides what a rule gives. */
 const reach = 1e6;
-/** By how much an unknown is let out that is stopped where the objective still falls, and how often. */
-const further = 1e3;
-const times = 4;
+/** By how much an unknown is let out farther that is stopped where the objective still falls. */
+const further = 100;
 /** A slope by the logarithm of an unknown, in units of the variance, that counts as falling. */
 const falling = 1e-4;
 
@@ -45,11 +44,18 @@ export function holding({ lower, upper }: SearchBounds, i: number, value: number
   return { lower: at(lower), upper: at(upper) };
 }
 
+/** Where a search ended, and whether it was stopped by its bounds, not by what is admitted, while it still fell. */
+export interface SearchEnd {
+  readonly lowest: Lowest;
+  readonly isHeldBack: boolean;
+}
+
 /**
  * Searches from a start inside the bounds of a search; where an unknown is stopped there although the objective still
- * falls, it is let out farther, up to what is admitted.
+ * falls, it is let out farther, inside what is admitted.
  *
  * @param variance - what an increase of the objective is divided by, at a value of it.
+ * @param enough - a value as low as which a search that stops short may end.
  */
 export function searchFrom(
   objective: Objective,
@@ -57,25 +63,37 @@ export function searchFrom(
   admitted: SearchBounds,
   within: SearchBounds,
   variance: (value: number) => number,
-): Lowest {
-  let found = objective.minimise(start, within.lower, within.upper);
-  let { lower, upper } = within;
-  for (let time = 0; time < times; time++) {
-    const at = found.estimates;
-    const least = falling * variance(found.value);
-    const reached = { lower, upper };
-    const out = Array.from(
-      at,
+  enough?: number,
+): SearchEnd {
+  const outer = widened(within, admitted);
+  const search = (from: Float64Array, reached: SearchBounds): SearchEnd => {
+    const lowest = objective.minimise(from, reached.lower, reached.upper, enough);
+    const least = falling * variance(lowest.value);
+    const isHeldBack = lowest.estimates.some(
       (value, i) => isStopped(value, i, admitted, reached) && Math.abs(objective.slope(i) * value) > least,
     );
-    if (!out.includes(true)) break;
-    lower = lower.map((low, i) =>
-      out[i] ? Math.max(admitted.lower[i]!, low - further * Math.abs(low)) : low,
-    );
-    upper = upper.map((high, i) =>
-      out[i] ? Math.min(admitted.upper[i]!, high + further * Math.abs(high)) : high,
-    );
-    found = objective.minimise(at, lower, upper);
-  }
-  return found;
+    return { lowest, isHeldBack };
+  };
+  // A start that an earlier search was let out to stays where it is.
+  const near = search(start, including(start, within, outer));
+  return near.isHeldBack ? search(near.lowest.estimates, outer) : near;
+}
+
+/** Bounds moved as far outwards as a point asks for, but not beyond others. */
+export function including(
+  point: Float64Array,
+  { lower, upper }: SearchBounds,
+  outer: SearchBounds,
+): SearchBounds {
+  return {
+    lower: lower.map((low, i) => Math.max(outer.lower[i]!, Math.min(low, point[i]!))),
+    upper: upper.map((high, i) => Math.min(outer.upper[i]!, Math.max(high, point[i]!))),
+  };
+}
+
+function widened({ lower, upper }: SearchBounds, admitted: SearchBounds): SearchBounds {
+  return {
+    lower: lower.map((low, i) => Math.max(admitted.lower[i]!, Math.min(low, further * low))),
+    upper: upper.map((high, i) => Math.min(admitted.upper[i]!, Math.max(high, further * high))),
+  };
 }

@@ -12,7 +12,7 @@ import { trialPoints } from "./trial-values.js";
 const kept = 5;
 const polish = { gradientTolerance: 1e-4, iterationLimit: 60 };
 /** How far beyond the middle of the points kept a polished point may move. */
-const polishReach = 100;
+const polishReach = 10;
 /** Points looked at: a few for speed, many where those led nowhere. */
 const fewTrials = 300;
 const manyTrials = 10_000;

@@ -8,7 +8,7 @@ import { describeFit } from "../result/describe-fit.js";
 import type { GroupFit } from "../result/group-fit.js";
 import { type Optimum, optimum } from "../search/optimum.js";
 import { place } from "../unknowns/unknowns.js";
-import type { Filtered } from "./filtered.js";
+import type { Filtered, ParticleCheck } from "./filtered.js";
 import { particleLikelihood } from "./particle-filter.js";
 import type { StateSpace } from "./state-space.js";
 import { type StateSpaceSearch, stateSpaceSearch } from "./state-space-search.js";
@@ -70,12 +70,10 @@ function described(rule: Rule, search: StateSpaceSearch, options: FitOptions, fo
   };
   if (filtering.method === "exact" || options.intervals === "none") return { ...fitted, filter };
   const check = particleCheck(space, found.at, measures.criteria.logLikelihood);
-  if (check === undefined) return { ...fitted, filter };
-  const rough = Math.abs(check.particles - check.filter) > tolerable + 2 * check.deviation;
   return {
     ...fitted,
     filter: { ...filter, check },
-    warnings: rough ? [...fitted.warnings, roughFilter(check)] : fitted.warnings,
+    warnings: [...fitted.warnings, ...roughFilter(check)],
   };
 }
 
@@ -85,25 +83,31 @@ const repetitions = 4;
 const tolerable = 1;
 
 /** The likelihood at the estimates by particles, with a fixed seed, beside the filter's. */
-function particleCheck(space: StateSpace, at: Float64Array, filter: number): Filtered["check"] {
+function particleCheck(space: StateSpace, at: Float64Array, filter: number): ParticleCheck {
   const model = space.particleModel(at);
   let stream = randomStream(1);
-  const found = Array.from({ length: repetitions }, () => {
+  const runs = Array.from({ length: repetitions }, () => {
     stream = stream.jump();
     return particleLikelihood(model, particles, stream);
   });
-  // Readings almost without error single out no particle: then there is nothing to compare with.
-  if (!found.every(Number.isFinite)) return undefined;
-  const mean = found.reduce((sum, value) => sum + value, 0) / repetitions;
+  // Readings almost without error single out no particle.
+  const found = runs.filter(Number.isFinite);
+  const lost = { filter, lost: repetitions - found.length, of: repetitions };
+  if (found.length < 2) return { ...lost, particles: undefined, deviation: undefined };
+  const mean = found.reduce((sum, value) => sum + value, 0) / found.length;
   const squares = found.reduce((sum, value) => sum + (value - mean) ** 2, 0);
-  return { filter, particles: mean, deviation: Math.sqrt(squares / (repetitions - 1)) };
+  return { ...lost, particles: mean, deviation: Math.sqrt(squares / (found.length - 1)) };
 }
 
-function roughFilter({ filter, particles: drawn }: NonNullable<Filtered["check"]>): Warning {
-  return {
-    code: "filter-rough",
-    message: `The filter takes the rule as straight within a step; particles, which do not, give a log-likelihood of ${drawn.toFixed(1)} instead of ${filter.toFixed(1)}: read the intervals as rough.`,
-  };
+/** Said where the filter's likelihood is not that of the particles; a check that came to nothing stands in the conventions. */
+function roughFilter({ filter, particles: drawn, deviation }: ParticleCheck): Warning[] {
+  if (drawn === undefined || Math.abs(drawn - filter) <= tolerable + 2 * deviation!) return [];
+  return [
+    {
+      code: "filter-rough",
+      message: `The filter takes the rule as straight within a step; particles, which do not, give a log-likelihood of ${drawn.toFixed(1)} instead of ${filter.toFixed(1)}: read the intervals as rough.`,
+    },
+  ];
 }
 
 function rootOf(variance: number | undefined): number | undefined {

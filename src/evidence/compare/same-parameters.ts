@@ -25,7 +25,7 @@ export interface SameParameters {
  * @param fit - of a record with several groups, fitted separately or combined; the other way is fitted here.
  * @throws {ModelError} `not-several-groups`, and `groups-not-together` for counts, censored values and errors in both.
  * @see Wilks, S. S. (1938), Annals of Mathematical Statistics 9, for the likelihood ratio.
- * @example sameParameters(fit(crowding, flasks, { errors: "observation" })).sentence;
+ * @example sameParameters(flasksFit).test.degreesOfFreedom; // [2, 12]
  */
 export function sameParameters(fit: Fit): SameParameters {
   const problem = problemOf(fit);

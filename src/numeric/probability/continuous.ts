@@ -3,7 +3,13 @@ import { gammaTails } from "./incomplete-gamma.js";
 import { stirlingError } from "./log-gamma.js";
 import { normalAt, normalCdf, normalDensity, normalUpperTail } from "./normal.js";
 import { poissonProbability } from "./point-probability.js";
-import { type Tails, type TailsWithSlope, tailsFromUpper, type WantedTails } from "./tails.js";
+import {
+  type Tails,
+  type TailsWithSlope,
+  tailsFromLower,
+  tailsFromUpper,
+  type WantedTails,
+} from "./tails.js";
 import { valueWithTails } from "./value-with-tails.js";
 
 /** What a distribution can be asked for; values and probabilities are taken as checked. */
@@ -67,10 +73,10 @@ export function exponentialShape(mean: number): Shape {
 
 /** The odds x/(1 - x) of a beta variable x, through which beta, F and t keep their digits near either end. */
 function betaOdds(a: number, b: number): Shape {
-  const tails = (odds: number): TailsWithSlope =>
-    odds === Number.POSITIVE_INFINITY
-      ? tailsFromUpper(0)
-      : betaTails(a, b, odds / (1 + odds), 1 / (1 + odds));
+  const tails = (odds: number): TailsWithSlope => {
+    if (odds === Number.POSITIVE_INFINITY) return tailsFromUpper(0);
+    return odds > 0 ? betaTails(a, b, odds / (1 + odds), 1 / (1 + odds)) : tailsFromLower(0);
+  };
   return {
     density: (odds) => (odds > 0 ? tails(odds).slope / odds : b * atZero(a)),
     tails,

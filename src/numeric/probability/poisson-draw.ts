@@ -1,3 +1,4 @@
+import { logGamma } from "./log-gamma.js";
 import type { RandomStream } from "./random-stream.js";
 
 /** Above this mean the counting of single events gives way to transformed rejection. */
@@ -35,18 +36,6 @@ function transformedRejection(mean: number, stream: RandomStream): number {
     if (distance >= 0.07 && v <= edge) return count;
     if (count < 0 || (distance < 0.013 && v > distance)) continue;
     const hat = Math.log((v * inverseAlpha) / (a / (distance * distance) + b));
-    if (hat <= count * logMean - mean - logFactorial(count)) return count;
+    if (hat <= count * logMean - mean - logGamma(count + 1)) return count;
   }
-}
-
-/** ln n! by Stirling's series, exact to the last digits from n = 10 on; the product below. */
-function logFactorial(n: number): number {
-  if (n < 10) {
-    let product = 1;
-    for (let k = 2; k <= n; k++) product *= k;
-    return Math.log(product);
-  }
-  const x = n + 1;
-  const s = 1 / (x * x);
-  return (x - 0.5) * Math.log(x) - x + 0.9189385332046727 + (1 / 12 - (1 / 360 - s / 1260) * s) / x;
 }

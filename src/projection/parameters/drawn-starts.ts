@@ -59,7 +59,7 @@ function drawOf(fit: Fit, group: GroupFit): UnknownsDraw {
   const loose = together ? undefined : loosest(group);
   if (loose !== undefined) {
     const draw = drawAlongProfile(fit, group, loose);
-    if (draw === undefined) throw refuseUndetermined(group.group, openNames(group));
+    if (draw === undefined) throw undetermined(group);
     return { draw, method: "along the profile", followed: loose.name };
   }
   const bent = together ? undefined : mostBent(group);
@@ -73,7 +73,7 @@ function drawOf(fit: Fit, group: GroupFit): UnknownsDraw {
     Float64Array.from(free.flatMap((i) => free.map((j) => group.covariance[i * size + j]!))),
     group.degreesOfFreedom,
   );
-  if (draw === undefined) throw refuseUndetermined(group.group, openNames(group));
+  if (draw === undefined) throw undetermined(group);
   return { draw, method: "around the estimates", followed: undefined };
 }
 
@@ -175,6 +175,14 @@ function standsOf(fit: Fit, ground: FitGround): (unknowns: Float64Array, own: Dr
     limits.every(([low, high], i) => unknowns[i]! >= low && unknowns[i]! <= high) && (!looked || stays(own));
 }
 
-function openNames(group: GroupFit): readonly string[] {
-  return group.estimates.filter((each) => each.standardError === undefined).map((each) => each.name);
+function undetermined({ group, estimates }: GroupFit): Error {
+  const open = estimates.filter(
+    ({ standardError, role }) => standardError === undefined && role === "parameter",
+  );
+  const twoErrors = estimates.some(({ name }) => name.startsWith("observation error"));
+  return refuseUndetermined(
+    group,
+    open.map(({ name }) => name),
+    twoErrors,
+  );
 }
