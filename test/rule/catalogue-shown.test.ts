@@ -15,6 +15,6 @@ test("commands without what they need ask for it in words", () => {
   expect(() => changePoint(undefined as never, undefined as never)).toThrow("No rule was given");
   expect(() => changePoint(quadratic, undefined as never)).toThrow("No record was given");
   expect(() => explain(undefined as never)).toThrowErrorMatchingInlineSnapshot(
-    `[ModelError: Which word? Give one of the trade, as in explain("fill rate").]`,
+    `[ModelError: Give a term to explain, such as explain("fill rate").]`,
   );
 });
