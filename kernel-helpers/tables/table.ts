@@ -19,7 +19,7 @@ export type ColumnKind = (typeof kinds)[number];
  * decimals (default 3). A text in a column of any kind ("not determined") is shown as it is.
  */
 export interface Column {
-  /** Property of the rows that has the value. */
+  /** Where rows hold the value. */
   readonly key: string;
   /** Heading of the column. */
   readonly label: string;
@@ -33,7 +33,9 @@ export interface Column {
   readonly digits?: number;
   /** Whether digits are set apart in thousands; false for a year; default true. */
   readonly grouped?: boolean;
-  /** Key of the standard error (estimate) or Monte Carlo error (probability) that decides the number of digits. */
+  /**
+   * Key of the standard error (estimate) or Monte-Carlo error (probability) that says how many digits count.
+   */
   readonly pairedWith?: string;
 }
 

@@ -2,11 +2,11 @@
 export interface NumberFormat {
   /** Decimal sign: "." or ",". */
   readonly decimal: string;
-  /** Thousands separator; "" for none. */
+  /** Put between groups of three digits before the decimal sign; "" for none. */
   readonly group: string;
-  /** Currency in the heading of a money column without a unit; "" for none. */
+  /** Currency written in the heading of a money column that states no unit; "" for none. */
   readonly currency: string;
-  /** Decimals of the currency (ISO 4217: 2 for most, 0 or 3 for some). */
+  /** Digits of the currency's minor unit (ISO 4217: 2 for most, 0 or 3 for some). */
   readonly minorDigits: number;
 }
 
