@@ -158,4 +158,24 @@ describe("compare", () => {
       `[ModelError: Fits that put the error in the process and in the observation explain different numbers (steps and values), so their likelihoods cannot be set side by side. Fit every rival with the same { errors }; check(fit) tells which kind of error the record speaks for.]`,
     );
   });
+
+  test("filters that begin differently are refused for that, and compared from the same first state", () => {
+    const read = [
+      52, 47, 55, 49, 44, 58, 51, 46, 53, 50, 43, 48, 57, 54, 45, 50, 52, 47, 56, 49, 51, 48, 46, 54,
+    ];
+    const rivals = (options: FitOptions): Fit[] =>
+      ["N[t+1] = a*N + b", "N[t+1] = N"].map((text) => fit(recurrence(text), series(read), options));
+    const both: FitOptions = { errors: "both", intervals: "none" };
+    const apart = rivals(both);
+    expect(apart.map(({ groups }) => groups[0]!.filter!.start)).toEqual(["stationary", "diffuse"]);
+    expect(() => compare(apart)).toThrowErrorMatchingInlineSnapshot(
+      `[ModelError: "N[t+1] = a*N + b" counts 24 readings and "N[t+1] = N" 23, of the same record: one of them takes the first reading from the rule's long-run distribution, the other begins at it. Give both fits the same first state, \`initial: { N: ... }\`, so that both count the readings after it.]`,
+    );
+    const { rows } = compare(rivals({ ...both, initial: { N: 50 } }));
+    // Source: computed with SciPy's minimize on an exact Kalman filter from a known first state of 50: log-likelihoods
+    // -65.2175398 with 2 unknowns and -64.3435787 with 4.
+    expect(rows.map(({ rule }) => rule)).toEqual(["N[t+1] = N", "N[t+1] = a*N + b"]);
+    expect(Math.abs(rows[0]!.aic - 134.4350796)).toBeLessThan(1e-6);
+    expect(Math.abs(rows[1]!.aic - 136.6871574)).toBeLessThan(1e-6);
+  });
 });
