@@ -1,4 +1,4 @@
-import type { Fit, GroupFit } from "../../src/estimate/index.js";
+import { type Fit, type GroupFit, problemOf } from "../../src/estimate/index.js";
 import { labelAt } from "../../src/record/index.js";
 import type { Rule } from "../../src/rule/index.js";
 import { groupNamed, groupRequiredError } from "../results/index.js";
@@ -40,16 +40,18 @@ export function groupOf({ groups }: Fit, name: string | undefined): GroupFit {
 
 /** First values by state of a fit, oldest first where the rule reads past ones. */
 export function fittedInitial(
-  { rule, observations, options }: Fit,
+  fit: Fit,
   group: GroupFit,
 ): Readonly<Record<string, number | readonly number[]>> {
+  const { rule, observations } = fit;
+  const { initial } = problemOf(fit);
   const recorded = observations.groups.find(({ name }) => name === group.group)!;
   return Object.fromEntries(
     rule.states.map((state) => {
       const lags = rule.lags.filter((kept) => kept.state === state).length;
       const values = Array.from({ length: lags + 1 }, (_, place) => {
         const estimated = group.estimates.find(({ name }) => name === `${state}[${place}]`);
-        const given = [options.initial?.[state] ?? rule.initial[state]].flat()[place];
+        const given = [initial(state)].flat()[place];
         return estimated?.value ?? (typeof given === "number" ? given : recorded.values[state]![place]!);
       });
       return [state, lags === 0 ? values[0]! : values];

@@ -23,13 +23,12 @@ export interface FitOptions {
    */
   readonly distribution?: ErrorDistribution;
   /**
-   * Standard deviation of the errors where it is known, one number or the name of an input column that holds one for
-   * every row: in the record's unit for `normal`, on the log scale for `lognormal` (0.1 for a coefficient of variation of
-   * 10%); with `errors: "both"`, that of the observation. It is that of a single reading: the mean of four replicates
-   * has half of it.
+   * Standard deviation of the errors of a single reading where it is known, one number or the name of an
+   * input column that holds one for every row: in the record's unit for "normal", on the log scale for
+   * "lognormal" (0.1 for a coefficient of variation of 10%); with `errors: "both"` that of the observation.
    */
   readonly sd?: number | string;
-  /** Parameters held at a value. */
+  /** Parameters held at a value, by name. */
   readonly fixed?: Readonly<Record<string, number>>;
   /** Lowest and highest admitted value, by parameter or by initial state ("N[0]"). */
   readonly bounds?: Readonly<Record<string, readonly [number, number]>>;
