@@ -7,9 +7,8 @@ import { runShown } from "../progress/index.js";
 import { showing } from "../tables/index.js";
 import {
   attractorValues,
-  firstPeriod,
   fitNotes,
-  fittedInitial,
+  fittedStart,
   groupOf,
   type OptionsFor,
   presentValues,
@@ -75,7 +74,9 @@ function asked<Result extends object>(
   return showing(result, () => shownTogether([...show(result), shownNotes(notes)]));
 }
 
-const withInitial = (fit: Fit, group: GroupFit): Given => ({ initial: fittedInitial(fit, group) });
+const withInitial = (fit: Fit, group: GroupFit): Given => ({
+  initial: fittedStart(fit, group).initial,
+});
 
 /**
  * Runs a rule from its first value, without random change; the result shows the path and its numbers, quantities
@@ -88,12 +89,10 @@ export const trajectory: Ask<engine.TrajectoryOptions, engine.Trajectory> = aski
   name: "trajectory",
   ask: engine.trajectory,
   show: steps.showPath,
-  bring: (fit, group) => ({
-    ...withInitial(fit, group),
-    record: fit,
-    startsAt: firstPeriod(fit, group),
-    ...(group.group !== "" && { group: group.group }),
-  }),
+  bring: (fit, group) => {
+    const { initial, period } = fittedStart(fit, group);
+    return { initial, record: fit, startsAt: period, ...(group.group !== "" && { group: group.group }) };
+  },
 });
 
 /**

@@ -38,30 +38,33 @@ export function groupOf({ groups }: Fit, name: string | undefined): GroupFit {
   return only!;
 }
 
-/** First values by state of a fit, oldest first where the rule reads past ones. */
-export function fittedInitial(
-  fit: Fit,
-  group: GroupFit,
-): Readonly<Record<string, number | readonly number[]>> {
-  const { rule, observations } = fit;
-  const { initial } = problemOf(fit);
-  const recorded = observations.groups.find(({ name }) => name === group.group)!;
-  return Object.fromEntries(
-    rule.states.map((state) => {
-      const lags = rule.lags.filter((kept) => kept.state === state).length;
-      const values = Array.from({ length: lags + 1 }, (_, place) => {
-        const estimated = group.estimates.find(({ name }) => name === `${state}[${place}]`);
-        const given = [initial(state)].flat()[place];
-        return estimated?.value ?? (typeof given === "number" ? given : recorded.values[state]![place]!);
-      });
-      return [state, lags === 0 ? values[0]! : values];
-    }),
-  );
+/** Where the trajectory of a fit begins. */
+export interface FittedStart {
+  /** Its period in words. */
+  readonly period: string;
+  /** First values by state, oldest first where the rule reads past ones. */
+  readonly initial: Readonly<Record<string, number | readonly number[]>>;
+}
+
+/** The fitted start of a trajectory; of steps the first recorded one; of a filter the state at the record's end. */
+export function fittedStart(fit: Fit, group: GroupFit): FittedStart {
+  const { kind, recorded, beginning } = problemOf(fit).group(group.group);
+  const isKnown = (after: number): boolean => beginning(after).initial.every(Number.isFinite);
+  const { period, initial } = beginning(kind === "state-space" ? undefined : recorded.index.find(isKnown));
+  const { states, lags } = fit.rule;
+  const values = states.map((state, slot) => {
+    const past = lags.flatMap((kept, i) =>
+      kept.state === state ? [{ ...kept, slot: states.length + i }] : [],
+    );
+    const all = [{ lag: 0, slot }, ...past].sort((a, b) => b.lag - a.lag).map((each) => initial[each.slot]!);
+    return [state, all.length === 1 ? all[0]! : all] as const;
+  });
+  return { period: labelAt(recorded.axis, period), initial: Object.fromEntries(values) };
 }
 
 /** The first value of each state, without those before it. */
 export function presentValues(fit: Fit, group: GroupFit): Readonly<Record<string, number>> {
-  const all = Object.entries(fittedInitial(fit, group));
+  const all = Object.entries(fittedStart(fit, group).initial);
   return Object.fromEntries(all.map(([state, values]) => [state, [values].flat().at(-1)!]));
 }
 
@@ -95,12 +98,6 @@ export function fitNotes(fit: Fit, group: GroupFit): readonly string[] {
           `${list(names)} ${names.length === 1 ? "is" : "are"} not determined by this record: other values explain it as well and may lead elsewhere.`,
         ]),
   ];
-}
-
-/** Where the record of a fit begins, in the words of its periods. */
-export function firstPeriod({ rule, observations }: Fit, { group }: GroupFit): string {
-  const { axis } = observations.groups.find(({ name }) => name === group)!;
-  return labelAt(axis, Math.max(0, ...rule.lags.map(({ lag }) => lag)));
 }
 
 /** Notes as a part of what a result shows. */

@@ -1,13 +1,5 @@
 import { ModelError } from "../../src/numeric/index.js";
 
-export function refuseUnknownDomain(domain: string, known: readonly string[]): ModelError {
-  return new ModelError(
-    "unknown-domain",
-    `A case belongs to one of ${known.join(", ")}; "${domain}" was given. The domain decides which caution is printed.`,
-    { domain, known },
-  );
-}
-
 export function refuseNoCase(command: string): ModelError {
   return new ModelError(
     "no-case-open",
@@ -25,22 +17,4 @@ export function refuseUnanswered(): ModelError {
 
 export function refuseEmptyAnswer(): ModelError {
   return new ModelError("empty-answer", "An answer is a sentence; an empty text was given.");
-}
-
-export function refuseNoTerm(): ModelError {
-  return new ModelError("no-term", 'Which word? Give one of the trade, as in explain("fill rate").');
-}
-
-export function refuseUnknownTerm(
-  name: string,
-  nearest: readonly string[],
-  known: readonly string[],
-): ModelError {
-  const hint =
-    nearest.length > 0 ? `Did you mean "${nearest.join('" or "')}"?` : `Known: ${known.join(", ")}.`;
-  return new ModelError("unknown-term", `There is no explanation of "${name}". ${hint}`, {
-    name,
-    nearest,
-    known,
-  });
 }

@@ -20,7 +20,7 @@ import {
   valuesByName,
 } from "./common-options.js";
 import type { FunctionSchema } from "./function-schema.js";
-import { level, measure, target } from "./measure-schemas.js";
+import { crossed, measure, oneLevel, target } from "./measure-schemas.js";
 import {
   either,
   flag,
@@ -50,8 +50,14 @@ const shared: Schema<Shared> = {
   inputs: optional(plans, "By input: what it will be, by the periods of the record or of the run"),
   parameters: only("rule", optional(valuesByName("parameter"), "Of a rule: its parameters by name")),
   initial: only("rule", optional(firstValues, "Of a rule: its first values by state")),
-  noise: only("rule", optional(noise, "Of a rule: random change by state, for probabilities")),
-  paths: optional(whole(1, 2000), "Random paths for probabilities and margins", 2000),
+  noise: only(
+    "rule",
+    optional(
+      noise,
+      "Of a rule: random change by state; every measure is then one of the paths' distribution",
+    ),
+  ),
+  paths: optional(whole(1, 4000), "Random paths where chance has a part", 4000),
   seed,
   onProgress,
   signal,
@@ -75,7 +81,7 @@ const solveOptions: Schema<SolveOptions> = {
   ),
   multiple: optional(
     positive,
-    "The value comes in multiples of this (0.01 for money, 1 for pieces), rounded to the side that meets the target",
+    "The value comes in multiples of this (0.01 for money, 1 for pieces); with `atMost` and `atLeast` only they are tried, with `is` the nearest is given",
   ),
   level: intervalLevel,
 };
@@ -160,8 +166,7 @@ const tradeoffSchema: FunctionSchema = {
 
 const timeToReachOptions: Schema<TimeToReachOptions> = {
   state: optional(nameOf("measured", "N"), "Name of a state or quantity", "the first state"),
-  risesTo: optional(level, "Level that is risen to, from below: a number, or relative to a parameter"),
-  fallsTo: optional(level, "Level that is fallen to, from above: a number, or relative to a parameter"),
+  ...crossed,
   level: intervalLevel,
   newUnit: optional(
     flag,
@@ -173,7 +178,7 @@ const timeToReachOptions: Schema<TimeToReachOptions> = {
 const timeToReachSchema: FunctionSchema = {
   name: "timeToReach",
   takes: [{ name: "ahead", takes: ["forecast", "simulation"] }],
-  options: { fields: timeToReachOptions, oneOf: [["risesTo", "fallsTo"]] },
+  options: { fields: timeToReachOptions, oneOf: oneLevel },
   example: "timeToReach(forecast(fit, { periods: 24 }), { risesTo: 120 })",
 };
 
@@ -193,8 +198,8 @@ const nextReadingOptions: Schema<NextReadingOptions> = {
         "{ from: 20, to: 30 }",
       ),
     ),
-    "Periods at which it could be taken, by number or label: a list, or two ends",
-    "every period from the first on",
+    "Periods at which it could be taken, by number or label: a list, or two ends; those within the record only where they are given, as for samples that were kept",
+    "every period after the record",
   ),
   answer: optional(measure, "Measure whose margin is to be narrowed; needed for a single fit"),
   state: optional(nameOf("state", "N"), "What is read", "the first state"),

@@ -133,7 +133,7 @@ const searchRange: Value<SearchRange> = either(pair, named(pair, "{ N: [0, 100] 
 const range = optional(
   searchRange,
   "Lowest and highest value to look at, for a system by state",
-  "the rule's bounds, else a million times the largest parameter either way",
+  "the rule's bounds, or as far as its parameters and its turns from rising to falling suggest",
 );
 
 const equilibriaOptions: Schema<EquilibriaOptions & OfFit> = {

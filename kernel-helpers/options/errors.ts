@@ -113,7 +113,8 @@ export function argumentError(
   all: readonly unknown[],
 ): ModelError {
   const value = all[place];
-  const isElsewhere = all.some((each) => wanted.some((kind) => isOf(kind, each)));
+  // Any object may be a record.
+  const isElsewhere = all.some((each) => wanted.some((kind) => kind !== "record" && isOf(kind, each)));
   const advice = isElsewhere ? "Give the arguments in this order" : adviceFor(wanted, value);
   const which = schema.takes.length > 1 ? ` as its ${ordinals[place]} argument` : "";
   const words = wanted.map((kind) => argumentWords[kind]);

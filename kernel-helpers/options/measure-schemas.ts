@@ -6,6 +6,7 @@ import {
   type Fields,
   nameOf,
   number,
+  type Option,
   optional,
   required,
   type Shape,
@@ -20,10 +21,10 @@ type MeasureKind = Measure extends infer Each ? (Each extends unknown ? keyof Ea
 /** What a measure is taken of. */
 const name = required(nameOf("measured", "N"), "State or quantity that is measured");
 
-const levelOf = required(text("K"), "Parameter or first value that the level is relative to");
+const levelOf = required(nameOf("levelled", "K"), "Parameter or first value that the level is relative to");
 
 /** A level: a number, a share of a parameter or first value, or decades below or above one. */
-export const level: Value<Level> = either(
+const level: Value<Level> = either(
   anyNumber,
   either(
     shapeOf<Extract<Level, { readonly share: number }>>(
@@ -50,12 +51,16 @@ const window: Fields = {
   to: optional(whole(1, 12), "Last period of the window, counted from the present", "the last one"),
 };
 
-const crossed: Fields = {
+/** A level that is reached from one side. */
+export const crossed: {
+  readonly risesTo: Option<Level, "optional">;
+  readonly fallsTo: Option<Level, "optional">;
+} = {
   risesTo: optional(level, "Level that is risen to, from below: a number, or relative to a parameter"),
   fallsTo: optional(level, "Level that is fallen to, from above: a number, or relative to a parameter"),
 };
 
-const oneLevel = [["risesTo", "fallsTo"]];
+export const oneLevel: readonly (readonly string[])[] = [["risesTo", "fallsTo"]];
 
 /** By the field that names it: what else a measure has. */
 const kinds: Readonly<

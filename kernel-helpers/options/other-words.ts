@@ -188,7 +188,8 @@ function likeliest(
   if (same.length > 0) return same;
   const byWord = known.filter((each) => listed(others[each]).includes(typed));
   const near = nearestNames(word, known);
-  if (byWord.length > 0 || near.length > 0) return [...new Set([...byWord, ...near])].slice(0, 3);
+  if (byWord.length > 0) return byWord.slice(0, 3);
+  if (near.length > 0) return near;
   const all = known.flatMap((each) => listed(others[each]).map((other) => ({ each, other })));
   const [likeWord] = nearestNames(
     typed,

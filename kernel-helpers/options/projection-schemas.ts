@@ -9,7 +9,7 @@ import type { ProcessNoise } from "../../src/rule/index.js";
 import { projectedPaths, projectedPeriods } from "./call-sizes.js";
 import { firstValues, fit, onProgress, rule, seed, share, signal, valuesByName } from "./common-options.js";
 import type { FunctionSchema } from "./function-schema.js";
-import { level } from "./measure-schemas.js";
+import { crossed, oneLevel } from "./measure-schemas.js";
 import {
   either,
   type Fields,
@@ -50,7 +50,7 @@ const error: Value<Noise> = {
 };
 
 const namedSd = required(
-  either(number({ from: 0 }, 0.1), text("s")),
+  either(number({ from: 0 }, 0.1), text("s", "the name of a parameter")),
   "Standard deviation a period: a number or the name of a parameter",
 );
 
@@ -83,8 +83,7 @@ export const noise: Value<Readonly<Record<string, Noise | ProcessNoise>>> = name
 
 const watched: Schema<Watch> = {
   state: optional(nameOf("measured", "N"), "Name of a state or quantity", "the first state"),
-  risesTo: optional(level, "Level that is risen to, from below: a number, or relative to a parameter"),
-  fallsTo: optional(level, "Level that is fallen to, from above: a number, or relative to a parameter"),
+  ...crossed,
 };
 
 const levels = optional(
@@ -93,7 +92,7 @@ const levels = optional(
   "[0.5, 0.8, 0.95]",
 );
 const watch = optional(
-  listOf(shapeOf(watched, '{ state: "N", fallsTo: 0 }')),
+  listOf(shapeOf(watched, '{ state: "N", fallsTo: 0 }', oneLevel)),
   "Levels whose first passage is followed, for runs with more paths than can be kept",
 );
 const scenarioOption = optional(
@@ -153,7 +152,7 @@ const simulateOptions: Schema<SimulateOptions> = {
   noise: optional(noise, "By state: the random change of each period", "what the rule says"),
   observationNoise: optional(
     named(error, noiseExample, "state"),
-    "By state: the observation error, which is reported and not carried on",
+    "By state: the error of an observation, reported and not carried on",
   ),
   paths: optional(whole(1, 4000), "Random paths", "4000, or 1 where nothing is random"),
   levels,

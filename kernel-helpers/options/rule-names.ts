@@ -3,7 +3,7 @@ import type { Rule } from "../../src/rule/index.js";
 import { isPlain } from "./written.js";
 
 /** What a name in an option must be a name of. */
-export type Role = "parameter" | "state" | "input" | "measured" | "free" | "varied";
+export type Role = "parameter" | "state" | "input" | "measured" | "free" | "varied" | "levelled";
 
 export const roleWords: Readonly<Record<Role, string>> = {
   parameter: "parameter",
@@ -12,6 +12,7 @@ export const roleWords: Readonly<Record<Role, string>> = {
   measured: "state or quantity",
   free: "parameter or initial state",
   varied: "parameter, first value or input",
+  levelled: "parameter or first value",
 };
 
 /** The names of a role; undefined where they are not known yet. */
@@ -53,6 +54,7 @@ function ofRule(
     input: inputs,
     measured: [...states, ...quantities],
     free: [...parameters, ...states, ...initial, ...factors],
+    levelled: [...parameters, ...initial],
     varied: [...parameters, ...initial, ...states, ...inputs],
   };
 }

@@ -49,7 +49,7 @@ const namedRuleOptions: Schema<NamedRuleOptions> = {
     'Lower and upper bound by state or parameter, as in { K: [0, Infinity] }; for a state also what happens there, { N: { range: [0, 500], atBounds: "error" } }',
     "a state is absorbed at a lower bound of 0 (it stays 0), and any other bound is an error of the rule, at which a path ends",
   ),
-  start: optional(valuesByName(), "Where a fit starts, by parameter"),
+  start: optional(valuesByName(), "Starting value of a fit, by parameter"),
   fixed: optional(valuesByName(), "Parameters held at a value in every fit, by name"),
   initial: optional(
     named(either(firstValue, oneOf("estimated")), "{ N: 10 }"),

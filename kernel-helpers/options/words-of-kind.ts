@@ -55,8 +55,8 @@ function numberWords({ from, above, to, below, whole, open }: Range): string {
   const noun = whole === true ? "a whole number" : "a number";
   if (above !== undefined && below !== undefined) return `between ${above} and ${below}`;
   if (from !== undefined && to !== undefined) return `${noun} from ${from} to ${to}`;
-  if (from !== undefined) return `${noun}, at least ${from}`;
+  if (from !== undefined) return `${noun} of at least ${from}`;
   if (above !== undefined) return `${noun} above ${above}`;
-  if (to !== undefined) return `${noun}, at most ${to}`;
+  if (to !== undefined) return `${noun} of at most ${to}`;
   return whole === true ? noun : open === true ? "a number" : "a finite number";
 }

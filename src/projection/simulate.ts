@@ -41,7 +41,7 @@ export interface SimulateOptions extends StartOptions, RunHooks {
   readonly scenarios?: Scenarios;
   /** By state: the random change of each period; default what the rule says. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** By state: the observation error, which is reported and not carried on. */
+  /** By state: the error of an observation, reported and not carried on. */
   readonly observationNoise?: Readonly<Record<string, Noise>>;
   /** Random paths; default 4000, or 1 where nothing is random. */
   readonly paths?: number;

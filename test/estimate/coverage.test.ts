@@ -36,7 +36,7 @@ test.each(["exponential truth fitted with a capacity", "only a product enters"])
   },
 );
 
-// T13. Source: R 4.2.2: mean +- 1.959963985 s/sqrt(n) of n normal values covers 2 P(t(n - 1) < 1.959963985) - 1. A simulation
+// Source: R 4.2.2: mean +- 1.959963985 s/sqrt(n) of n normal values covers 2 P(t(n - 1) < 1.959963985) - 1. A simulation
 // that is right must reproduce this wrong coverage; 20,000 samples, 4 binomial standard deviations.
 test.each([
   [5, 0.8784403402],

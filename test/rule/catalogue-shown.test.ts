@@ -10,11 +10,11 @@ test("the catalogue shows itself as a table of all its rules", async () => {
 
 test("commands without what they need ask for it in words", () => {
   const quadratic = recurrence("x[t+1] = 3.2*x*(1 - x)");
-  expect(() => cycles(quadratic, undefined as never)).toThrow("Which period? Give { period: 2 }");
-  expect(() => cycles(quadratic, {} as never)).toThrow("Which period? Give { period: 2 }");
-  expect(() => changePoint(undefined as never, undefined as never)).toThrow("No rule was given");
-  expect(() => changePoint(quadratic, undefined as never)).toThrow("No record was given");
+  expect(() => cycles(quadratic, undefined as never)).toThrow("Write `period: 2`");
+  expect(() => cycles(quadratic, {} as never)).toThrow("Write `period: 2`");
+  expect(() => changePoint(undefined as never, undefined as never)).toThrow("needs a rule");
+  expect(() => changePoint(quadratic, undefined as never)).toThrow("needs observations");
   expect(() => explain(undefined as never)).toThrowErrorMatchingInlineSnapshot(
-    `[ModelError: Which word? Give one of the trade, as in explain("fill rate").]`,
+    `[ModelError: The \`name\` of \`explain\` must be a word of the trade; nothing was given. Write \`explain("fill rate")\`.]`,
   );
 });

@@ -34,8 +34,8 @@ export interface SolveOptions extends DecisionOptions {
   /** Lowest and highest value looked at; default a hundredth to a hundred times the present one, within its bounds. */
   readonly range?: readonly [number, number];
   /**
-   * The value comes in multiples of this (0.01 for money, 1 for pieces), rounded to the side that meets the
-   * target.
+   * The value comes in multiples of this (0.01 for money, 1 for pieces); with `atMost` and `atLeast` only
+   * they are tried, with `is` the nearest is given.
    */
   readonly multiple?: number;
   /** Confidence level of the interval, between 0 and 1; default 0.95. */

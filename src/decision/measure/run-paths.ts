@@ -56,6 +56,7 @@ export function pathRunner(context: DecisionContext, kind: PathKind, quantities:
   const paths = kind === "estimates" ? 1 : kind === "chance" ? context.paths : kind.draws * kind.each;
   const begin = beginnings(context, kind, paths);
   return (follow, choice) => {
+    context.tick();
     const { starts, streams } = begin();
     const { inputs, from, periods, initial, compiled } = groundAt(context, choice);
     const held = withChoice(starts, ground, choice);

@@ -39,9 +39,9 @@ export interface DecisionOptions extends StartOptions, RunHooks {
   readonly parameters?: Readonly<Record<string, number>>;
   /** Of a rule: its first values by state. */
   readonly initial?: InitialValues;
-  /** Of a rule: random change by state, for probabilities. */
+  /** Of a rule: random change by state; every measure is then one of the paths' distribution. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** Random paths for probabilities and margins; default 2000. */
+  /** Paths where chance has a part; default 4000. */
   readonly paths?: number;
   /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
@@ -92,12 +92,13 @@ export function decisionContext(subject: Fit | Rule, options: DecisionOptions): 
     ...own,
     paths: options.paths ?? 4000,
     seed: options.seed ?? 1,
+    tick: ticker(options, isFit(subject) ? runsOfFit : runsOfRule),
     random: own.changeAt(ground.parameters).some((noise) => noise !== undefined),
     levelAt: (level) => levelValues(level, centralLevels(ground))[0]!,
   };
 }
 
-type OwnContext = Omit<DecisionContext, "paths" | "seed" | "random" | "levelAt">;
+type OwnContext = Omit<DecisionContext, "paths" | "seed" | "tick" | "random" | "levelAt">;
 
 function fitContext(fit: Fit, options: DecisionOptions): OwnContext {
   const { rule, observations } = fit;
@@ -126,7 +127,6 @@ function fitContext(fit: Fit, options: DecisionOptions): OwnContext {
         (own) => own.jump(),
         randomStream(options.seed ?? 1),
       ),
-    tick: ticker(options, runsOfFit),
     planned,
     unitOf: (name) => {
       const state = stateOf(name);
@@ -172,7 +172,6 @@ function ruleContext(rule: Rule, options: DecisionOptions): OwnContext {
     plans: options.inputs ?? {},
     changeAt: (at) => ruleNoise(rule, at, options.noise),
     stream: () => randomStream(options.seed ?? 1),
-    tick: ticker(options, runsOfRule),
     planned,
     unitOf: (name) => rule.units[stateOf(name)] ?? "",
     periodUnit: axis.unit,

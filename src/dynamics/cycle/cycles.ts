@@ -34,8 +34,8 @@ export interface CyclesOptions extends HeldSetting {
   /** Periods until the values come round. */
   readonly period: number;
   /**
-   * Lowest and highest value to look at, for a system by state; default the rule's bounds, else a million
-   * times the largest parameter either way.
+   * Lowest and highest value to look at, for a system by state; default the rule's bounds, or as far as its
+   * parameters and its turns from rising to falling suggest.
    */
   readonly range?: SearchRange;
 }

@@ -39,8 +39,8 @@ export interface Equilibria {
 
 export interface EquilibriaOptions extends HeldSetting {
   /**
-   * Lowest and highest value to look at, for a system by state; default the rule's bounds, else a million
-   * times the largest parameter either way.
+   * Lowest and highest value to look at, for a system by state; default the rule's bounds, or as far as its
+   * parameters and its turns from rising to falling suggest.
    */
   readonly range?: SearchRange;
   /** For systems: how many places the search starts from; default 400. */

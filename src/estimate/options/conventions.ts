@@ -33,7 +33,7 @@ function errorSentence({ errors }: FitOptions): string {
   if (errors === "observation")
     return "Error in the observation: whole trajectory fitted, initial state estimated unless given.";
   return errors === "process"
-    ? "Error in the process: each step fitted from the recorded value before it, over a gap by as many steps."
+    ? "Error in the process: each step fitted from the recorded value before it; over a gap by as many steps, with the variance that their errors add up to."
     : "Error in both the process and the observation: likelihood of the readings by the Kalman filter.";
 }
 

@@ -43,8 +43,6 @@ export interface FitProblem {
   readonly bounds: (name: string) => readonly [number, number];
   /** What its values come to around other centres; of a filter as if its predictions had one variance. */
   readonly around: Around;
-  /** What the fit was given as the first values of a state, oldest first; undefined where they were found or recorded. */
-  readonly initial: (state: string) => number | readonly number[] | undefined;
   /** One group at its estimates. */
   readonly group: (name: string) => GroupProblem;
   /** The same fit of another record, or with other errors. */
@@ -77,10 +75,6 @@ export function fitProblem(
     factors: options.factor ?? {},
     aspects: aspectsOf(rule, options),
     bounds: (name) => options.bounds?.[name] ?? rule.bounds[name] ?? open,
-    initial(state) {
-      const given = options.initial?.[state] ?? rule.initial[state];
-      return given === "estimated" ? undefined : given;
-    },
     group(name) {
       const known = made.get(name);
       if (known !== undefined) return known;

@@ -21,7 +21,8 @@ export function fieldsOf(
 ): string | undefined {
   const wanted = checker.getContextualType(value);
   const names = wanted === undefined ? [] : fieldNames(library, checker, wanted, value);
-  if (names.length === 0) return undefined;
+  if (wanted === undefined || names.length === 0) return undefined;
+  if (isResult(names)) return `A ${checker.typeToString(wanted)} is the result of another function.`;
   const bySimilarity =
     given === undefined
       ? names
@@ -46,14 +47,15 @@ export function missingArgument(
   if (parameter === undefined) return undefined;
   const type = checker.getTypeOfSymbolAtLocation(parameter, call);
   const required = fieldNames(library, checker, type, call).filter((field) => field.includes(":"));
-  // A type with a kind is the result of another function, not something to write out.
-  const isResult = required.some((field) => field.startsWith("kind:"));
-  const isOptions = required.length > 0 && !isResult && type.isClassOrInterface();
+  const isOptions = required.length > 0 && !isResult(required) && type.isClassOrInterface();
   const fields = isOptions ? ` with ${required.join(", ")}` : "";
   return `Argument \`${parameter.name}\` is missing: ${checker.typeToString(type)}${fields}.`;
 }
 
-/** Optional fields by name, required ones as `name: type`, with unions written out. */
+/** A type with a kind is the result of another function, not something to write out. */
+const isResult = (fields: readonly string[]): boolean => fields.some((field) => field.startsWith("kind:"));
+
+/** Optional fields by name, required ones as `name: type`, with unions written out; each once, whatever has it. */
 function fieldNames(
   library: typeof ts,
   checker: ts.TypeChecker,
@@ -61,13 +63,14 @@ function fieldNames(
   at: ts.Node,
 ): readonly string[] {
   const parts = type.isUnion() ? type.types : [type];
-  const fields = parts.flatMap((part) => [...checker.getPropertiesOfType(part)]);
-  const described = fields.map((field) => {
-    if (field.flags & library.SymbolFlags.Optional) return field.name;
+  const types = new Map<string, Set<string>>();
+  for (const field of parts.flatMap((part) => [...checker.getPropertiesOfType(part)])) {
     const own = checker.getTypeOfSymbolAtLocation(field, at);
-    return `${field.name}: ${checker.typeToString(own, undefined, library.TypeFormatFlags.InTypeAlias)}`;
-  });
-  return [...new Set(described)];
+    const isOptional = (field.flags & library.SymbolFlags.Optional) !== 0;
+    const text = isOptional ? "" : checker.typeToString(own, undefined, library.TypeFormatFlags.InTypeAlias);
+    types.set(field.name, (types.get(field.name) ?? new Set()).add(text));
+  }
+  return Array.from(types, ([name, own]) => (own.has("") ? name : `${name}: ${[...own].join(" | ")}`));
 }
 
 /** Share of the letter pairs (bigrams) that a field's name has in common with the text given. */
