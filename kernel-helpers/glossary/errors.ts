@@ -2,9 +2,6 @@ import { didYouMean, ModelError } from "../../src/numeric/index.js";
 import { plural } from "../wording/index.js";
 import { nearestTerms, termsByField } from "./look-up.js";
 
-export const missingTermError = (): ModelError =>
-  new ModelError("no-term", 'Give a term to explain, such as explain("fill rate").');
-
 /** @param field - field of the open case, whose terms are listed first. */
 export function unknownTermError(word: string, field?: string): ModelError {
   const nearest = nearestTerms(word);

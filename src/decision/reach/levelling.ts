@@ -4,7 +4,7 @@ import type { GroupForecast } from "../../projection/index.js";
 /** A path whose moves shrink, and are less than this share of itself in the last period, has levelled off. */
 const still = 1e-3;
 
-/** The level to which a path tends by the end of its forecast, with the limits of the draws there. */
+/** The level to which a path tends by the end of its forecast, with the limits of the paths there. */
 export function levelling(
   group: GroupForecast,
   place: number,

@@ -41,7 +41,7 @@ export interface DecisionOptions extends StartOptions, RunHooks {
   readonly initial?: InitialValues;
   /** Of a rule: random change by state; every measure is then one of the paths' distribution. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** Paths where chance has a part; default 4000. */
+  /** Random paths where chance has a part; default 4000. */
   readonly paths?: number;
   /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
