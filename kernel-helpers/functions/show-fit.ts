@@ -5,6 +5,7 @@ import {
   type GroupFit,
   problemOf,
   secondOpinion,
+  testWords,
 } from "../../src/estimate/index.js";
 import { ruleLabel } from "../../src/rule/index.js";
 import { type Figure, fittedFigure, profileFigure } from "../figures/index.js";
@@ -61,11 +62,22 @@ function estimatesTable(fitted: EngineFit): Table {
     rows,
     notes: [
       ...ruleNotes([fitted.rule]),
-      ...fitted.groups.flatMap((group) => groupNotes(fitted, group)),
+      ...(fitted.population
+        ? togetherNotes(fitted)
+        : fitted.groups.flatMap((group) => groupNotes(fitted, group))),
       ...cautionsByGroup([{ group: "", warnings: fitted.warnings }, ...fitted.groups]),
       ...fitted.conventions,
     ],
   });
+}
+
+/** Groups fitted together are one likelihood. */
+function togetherNotes({ groups, criteria, commonParameters }: EngineFit): string[] {
+  const sigma = groups[0]!.sigma.toPrecision(3);
+  const size = `${criteria.count} residuals of ${groups.length} groups, sigma ${sigma}, AICc ${criteria.aicCorrected.toFixed(2)}.`;
+  return commonParameters
+    ? [size, `Same parameters for all groups: ${testWords(commonParameters)}.`]
+    : [size];
 }
 
 function groupNotes(fitted: EngineFit, group: GroupFit): string[] {

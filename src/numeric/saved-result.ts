@@ -87,7 +87,6 @@ function writtenObject(value: object, place: string): Written {
   const tag = Object.prototype.toString.call(value).slice(8, -1);
   if (tag in arrays)
     return { [mark + tag]: Array.from(value as NumberArray, (each) => numeral(each, (special) => special)) };
-  if (tag === "Date") return { $date: (value as Date).getTime() };
   if (tag !== "Object") throw notSavable(place, tag);
   const members = Object.entries(value).map(([name, part]): [string, Written] => [
     name,
@@ -119,8 +118,6 @@ function readMarked(name: string, value: Written): unknown {
       return undefined;
     case "bigint":
       return BigInt(value as string);
-    case "date":
-      return new Date(value as number);
     case "members":
       return Object.fromEntries(
         (value as readonly [string, Written][]).map(([member, part]) => [member, read(part)]),

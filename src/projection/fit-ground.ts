@@ -25,7 +25,7 @@ export interface FitGround extends Ground {
   /** By state that the record reads through a factor: the factor's name and value, and its place among the unknowns. */
   readonly factors: readonly (StateFactor | undefined)[];
   /** Where a filter leaves the present state uncertain. */
-  readonly belief?: NonNullable<Beginning["belief"]>;
+  readonly filtered?: NonNullable<Beginning["filtered"]>;
 }
 
 /**
@@ -44,7 +44,7 @@ export function fitGround(
   const { rule } = fit;
   const { recorded, beginning } = problemOf(fit).group(group.group);
   const recordEnd = startsAfter ?? recorded.index[recorded.index.length - 1]!;
-  const { period: from, fromStart, initial, places, belief } = beginning(recordEnd);
+  const { period: from, fromStart, initial, places, filtered } = beginning(recordEnd);
   [...rule.states.map((state) => ({ state, lag: 0 })), ...rule.lags].forEach(({ state, lag }, s) => {
     if (!Number.isFinite(initial[s]!)) throw refuseGap(state, periodWords(recorded.axis, from - lag));
   });
@@ -71,7 +71,7 @@ export function fitGround(
     startNames: fromStart ? startNames(rule) : [],
     firstValues: fromStart ? {} : firstRecorded(rule, recorded),
     factors: factorsOf(fit, group),
-    ...(belief && { belief }),
+    ...(filtered && { filtered }),
   };
 }
 

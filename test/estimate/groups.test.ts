@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { type Fit, fit } from "../../src/estimate/index.js";
+import { estimates, type Fit, fit } from "../../src/estimate/index.js";
 import { leastSquares, randomStream } from "../../src/numeric/index.js";
 import { recurrence } from "../../src/rule/index.js";
 import { type Columns, record } from "./record.js";
@@ -96,6 +96,28 @@ describe("groups of a record", () => {
       const whole = known + (known * weight * mean!.standardError!) ** 2;
       expect(Math.abs(group.estimates[0]!.standardError! / Math.sqrt(whole) - 1)).toBeLessThan(1e-5);
     }
+  });
+
+  test("the view of estimates shows what holds for all groups once, or their means beside the groups' own", () => {
+    const together = fit(sheltered, record(three), { ...options, groups: "combined" });
+    expect(estimates(together).map(({ group, name }) => `${group}: ${name}`)).toEqual([
+      "all groups: R",
+      "all groups: K",
+      ...["flask 1", "flask 2", "flask 3"].map((flask) => `${flask}: N[0]`),
+    ]);
+    const mixed = fit(sheltered, record(three), { ...options, groups: "mixed" });
+    expect(
+      estimates(mixed)
+        .map(({ group, name }) => `${group}: ${name}`)
+        .slice(0, 6),
+    ).toEqual([
+      "all groups: R",
+      "all groups: K",
+      "all groups: between-group sd of R",
+      "all groups: between-group sd of K",
+      "all groups: sigma",
+      "flask 1: R",
+    ]);
   });
 
   test("too few groups for a population, and counts together, are refused", () => {

@@ -115,8 +115,6 @@ describe("explain", () => {
   });
 
   test("no word is answered with an example", () => {
-    expect(() => explain(undefined as never)).toThrow(
-      'Give a term to explain, such as explain("fill rate").',
-    );
+    expect(() => explain(undefined as never)).toThrow('Write `explain("fill rate")`.');
   });
 });

@@ -1,4 +1,4 @@
-import { chiSquareCdf, fCdf, type Warning } from "../../numeric/index.js";
+import { chiSquareUpperTail, fUpperTail, type Warning } from "../../numeric/index.js";
 import { squaresObjective } from "../search/squares-objective.js";
 import type { Prepared } from "../systems/prepared.js";
 import type { Unknowns } from "../unknowns/unknowns.js";
@@ -39,11 +39,11 @@ export function commonParameters(
     return {
       statistic: rise,
       degreesOfFreedom: [more, Number.POSITIVE_INFINITY],
-      probability: 1 - chiSquareCdf(rise, more),
+      probability: chiSquareUpperTail(rise, more),
     };
   const left = count - free;
   const statistic = rise / more / (apart / left);
-  return { statistic, degreesOfFreedom: [more, left], probability: 1 - fCdf(statistic, more, left) };
+  return { statistic, degreesOfFreedom: [more, left], probability: fUpperTail(statistic, more, left) };
 }
 
 /** Probability below which a combined fit carries the caution. */

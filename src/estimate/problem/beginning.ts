@@ -17,7 +17,11 @@ export interface Beginning {
   /** By unknown of the fit: its place among parameters, then state vector; -1 where the trajectory does not begin with it. */
   readonly places: Int32Array;
   /** Where a filter leaves the state uncertain: its mean and covariance, on the fitting scale. */
-  readonly belief?: { readonly mean: Float64Array; readonly covariance: Float64Array; readonly scale: Scale };
+  readonly filtered?: {
+    readonly mean: Float64Array;
+    readonly covariance: Float64Array;
+    readonly scale: Scale;
+  };
 }
 
 /**
@@ -37,14 +41,14 @@ export function beginningOf(
   const reach = longestLag(rule);
   const slots = slotsOf(rule);
   const last = fitted.filter?.last;
-  const belief = last && {
+  const filtered = last && {
     mean: Float64Array.from(last.mean),
     covariance: Float64Array.from(last.covariance),
     scale,
   };
   const given = unknownsOf(rule, options).initial;
   const initial = Float64Array.from(slots, ({ state, lag, name }, s) => {
-    if (belief !== undefined) return scale.from(belief.mean[s]!);
+    if (filtered !== undefined) return scale.from(filtered.mean[s]!);
     if (fromStart) return fitted.estimates.find((each) => each.name === name)?.value ?? given[s]!;
     return recorded.values[state]![recorded.index.indexOf(after - lag)] ?? Number.NaN;
   });
@@ -54,5 +58,5 @@ export function beginningOf(
     return slot < 0 || !fromStart ? -1 : rule.parameters.length + slot;
   });
   const period = fromStart ? reach : after;
-  return { period, fromStart, initial, places, ...(belief && { belief }) };
+  return { period, fromStart, initial, places, ...(filtered && { filtered }) };
 }

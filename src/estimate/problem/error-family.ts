@@ -93,18 +93,10 @@ const poissonFamily: ErrorFamily = {
 
 /** Of a count, or of counts up to (-1) or from (1) it on; the limit itself belongs to both. */
 function logPoisson(count: number, mean: number, censoring: number): number {
-  const exact = count * Math.log(mean) - mean - logGamma(count + 1);
-  if (censoring === 0) return exact;
+  if (censoring === 0) return count * Math.log(mean) - mean - logGamma(count + 1);
   // P(Y >= y; mean) is the chi-square probability of 2 mean with 2 y degrees of freedom.
   if (censoring > 0) return count === 0 ? 0 : Math.log(chiSquareCdf(2 * mean, 2 * count));
-  if (count >= mean) return Math.log1p(-chiSquareCdf(2 * mean, 2 * (count + 1)));
-  // Far below the mean the probabilities fall off towards 0 by the ratio k/mean: their sum keeps its digits.
-  let sum = 1;
-  for (let k = count, term = 1; k > 0 && term > 1e-17 * sum; k--) {
-    term *= k / mean;
-    sum += term;
-  }
-  return exact + Math.log(sum);
+  return Math.log(chiSquareUpperTail(2 * mean, 2 * (count + 1)));
 }
 
 /** Counts with variance mean + dispersion * mean^2. */

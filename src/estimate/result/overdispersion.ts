@@ -1,4 +1,4 @@
-import { chiSquareCdf, type Warning } from "../../numeric/index.js";
+import { chiSquareUpperTail, type Warning } from "../../numeric/index.js";
 
 /** Whether counts scatter more than the Poisson distribution that was fitted to them allows. */
 export interface Overdispersion {
@@ -30,7 +30,7 @@ export function overdispersionOf(
   const statistic = used.reduce((sum, i) => sum + pearson[i]! ** 2, 0);
   const variance = (used.reduce((sum, i) => sum + 2 + 1 / means[i]!, 0) * degreesOfFreedom) / used.length;
   const multiple = variance / (2 * degreesOfFreedom);
-  const probability = 1 - chiSquareCdf(statistic / multiple, degreesOfFreedom / multiple);
+  const probability = chiSquareUpperTail(statistic / multiple, degreesOfFreedom / multiple);
   return { statistic, degreesOfFreedom, ratio: statistic / degreesOfFreedom, probability };
 }
 

@@ -10,12 +10,29 @@ export interface EstimateRow extends Omit<Estimate, "trace"> {
   readonly group: string;
 }
 
-/** Every unknown of every group of a fit. */
+/** What the rows of parameters that groups share say instead of a group. */
+const allGroups = "all groups";
+
+/**
+ * Every unknown of a fit, group by group. Of groups fitted together what holds for all of them comes first: the common
+ * parameters, or their means and standard deviations among groups and sigma.
+ */
 export function estimates(fit: Fit): readonly EstimateRow[] {
-  return fit.groups.flatMap((group) =>
-    group.estimates.map(({ trace: _, ...estimate }) => ({ group: group.group, ...estimate })),
+  const { population } = fit;
+  const common = (population ?? []).map((each) => rowOf(allGroups, each));
+  const shared = new Set(isMixed(fit) ? [] : population?.map(({ name }) => name));
+  const own = fit.groups.flatMap((group) =>
+    group.estimates.filter(({ name }) => !shared.has(name)).map((each) => rowOf(group.group, each)),
   );
+  return [...common, ...own];
 }
+
+function rowOf(group: string, { trace: _, ...estimate }: Estimate): EstimateRow {
+  return { group, ...estimate };
+}
+
+/** Whether parameters differ among groups, which have estimates of their own beside the means. */
+const isMixed = ({ population }: Fit): boolean => population?.some(({ role }) => role === "scale") === true;
 
 /** A row of the points view: one compared value of one group. */
 export interface PointRow extends FitPoint {
@@ -47,12 +64,14 @@ export function summary(fit: Fit): readonly SummaryRow[] {
   const [first] = fit.groups;
   if (fit.population !== undefined && first !== undefined)
     return [
-      rowOf(fit, { ...first, group: "", sumOfSquares: squaresOf(fit) }, fit.criteria, freeUnknowns(fit)),
+      summaryOf(fit, { ...first, group: "", sumOfSquares: squaresOf(fit) }, fit.criteria, freeUnknowns(fit)),
     ];
-  return fit.groups.map((group) => rowOf(fit, group, group.criteria ?? fit.criteria, group.estimates.length));
+  return fit.groups.map((group) =>
+    summaryOf(fit, group, group.criteria ?? fit.criteria, group.estimates.length),
+  );
 }
 
-function rowOf(fit: Fit, group: GroupFit, criteria: Criteria, parameters: number): SummaryRow {
+function summaryOf(fit: Fit, group: GroupFit, criteria: Criteria, parameters: number): SummaryRow {
   return {
     group: group.group,
     rule: ruleLabel(fit.rule),

@@ -1,7 +1,7 @@
 import type { CompiledRule } from "../../rule/index.js";
 
 /** A normal distribution of the state vector on the fitting scale, moved and narrowed in place. */
-export interface Belief {
+export interface StateEstimate {
   /** [slots] */
   readonly mean: Float64Array;
   /** [slots, slots] */
@@ -38,20 +38,20 @@ export function scratch(
 }
 
 /**
- * Moves the belief one period on: mean f(m), covariance J C J' + process variance, J being the rule's derivative by the
+ * Moves the estimate one period on: mean f(m), covariance J C J' + process variance, J being the rule's derivative by the
  * state vector at m. Exact where f is linear on the fitting scale.
  */
 export function predict(
-  belief: Belief,
+  estimate: StateEstimate,
   dynamics: Dynamics,
   parameters: Float64Array,
   period: number,
   processVariance: Float64Array,
 ): void {
-  const { mean, covariance } = belief;
+  const { mean, covariance } = estimate;
   const { path, slopes, states, log } = dynamics;
   const slots = mean.length;
-  step(belief, dynamics, parameters, period);
+  step(estimate, dynamics, parameters, period);
   if (slots === 1) covariance[0] = slopes[0]! * slopes[0]! * covariance[0]! + processVariance[0]!;
   else {
     spreadOut(covariance, slopes, dynamics.work, slots);
@@ -62,7 +62,7 @@ export function predict(
 }
 
 /** Runs the rule one period from the mean, and takes its derivatives by the state vector to the fitting scale. */
-function step({ mean }: Belief, dynamics: Dynamics, parameters: Float64Array, period: number): void {
+function step({ mean }: StateEstimate, dynamics: Dynamics, parameters: Float64Array, period: number): void {
   const { compiled, inputs, log, value, path, sensitivities, slopes } = dynamics;
   const slots = mean.length;
   const width = parameters.length + slots;
@@ -94,9 +94,9 @@ function spreadOut(covariance: Float64Array, slopes: Float64Array, work: Float64
   }
 }
 
-/** Takes in a reading of slot i; returns its log-likelihood, given all readings before it. */
-export function takeIn(
-  { mean, covariance }: Belief,
+/** Updates the estimate by a reading of slot i; returns its log-likelihood, given all readings before it. */
+export function update(
+  { mean, covariance }: StateEstimate,
   { value: column }: Dynamics,
   i: number,
   reading: number,
@@ -104,12 +104,12 @@ export function takeIn(
 ): number {
   const slots = mean.length;
   const spread = covariance[i * slots + i]! + variance;
-  const surprise = reading - mean[i]!;
+  const innovation = reading - mean[i]!;
   for (let k = 0; k < slots; k++) column[k] = covariance[k * slots + i]!;
   for (let a = 0; a < slots; a++) {
-    mean[a] = mean[a]! + (column[a]! * surprise) / spread;
+    mean[a] = mean[a]! + (column[a]! * innovation) / spread;
     for (let b = 0; b < slots; b++)
       covariance[a * slots + b] = covariance[a * slots + b]! - (column[a]! * column[b]!) / spread;
   }
-  return -0.5 * (Math.log(2 * Math.PI * spread) + (surprise * surprise) / spread);
+  return -0.5 * (Math.log(2 * Math.PI * spread) + (innovation * innovation) / spread);
 }

@@ -10,19 +10,19 @@ export interface LinearRule {
 }
 
 /** A normal distribution of a single state, moved in place. */
-export interface ScalarBelief {
+export interface ScalarEstimate {
   mean: number;
   variance: number;
 }
 
 /** The long run of a stable rule; undefined where |slope| is not below 1. */
-export function longRun({ intercept, slope, processVariance }: LinearRule): ScalarBelief | undefined {
+export function longRun({ intercept, slope, processVariance }: LinearRule): ScalarEstimate | undefined {
   if (!(Math.abs(slope) < 1)) return undefined;
   return { mean: intercept / (1 - slope), variance: processVariance / (1 - slope * slope) };
 }
 
 /**
- * Log-likelihood of the readings from number `from` on, by the exact Kalman filter in plain numbers, the belief
+ * Log-likelihood of the readings from number `from` on, by the exact Kalman filter in plain numbers, the estimate
  * standing at the period where the readings begin.
  *
  * @param told - receives the one-step predictions and their standard deviations, where given.
@@ -31,12 +31,12 @@ export function linearFilter(
   rule: LinearRule,
   readings: Readings,
   from: number,
-  belief: ScalarBelief,
+  estimate: ScalarEstimate,
   told: Predictions | undefined,
 ): number {
   const { intercept, slope, processVariance } = rule;
   const { periods, values, roots, count } = readings;
-  let { mean, variance } = belief;
+  let { mean, variance } = estimate;
   let period = readings.first;
   let sum = 0;
   for (let i = from; i < count; i++) {
@@ -49,13 +49,13 @@ export function linearFilter(
       told.mean[i] = mean;
       told.deviation[i] = Math.sqrt(spread);
     }
-    const surprise = values[i]! - mean;
+    const innovation = values[i]! - mean;
     const gain = variance / spread;
-    mean += gain * surprise;
+    mean += gain * innovation;
     variance -= gain * variance;
-    sum -= Math.log(spread) + (surprise * surprise) / spread;
+    sum -= Math.log(spread) + (innovation * innovation) / spread;
   }
-  belief.mean = mean;
-  belief.variance = variance;
+  estimate.mean = mean;
+  estimate.variance = variance;
   return 0.5 * (sum - (count - from) * Math.log(2 * Math.PI));
 }

@@ -2,7 +2,7 @@ import type { RandomStream } from "../../numeric/index.js";
 import type { Readings } from "../rows/readings.js";
 import type { Dynamics } from "./kalman-step.js";
 
-/** A cloud of possible states, moved and drawn anew in place. */
+/** A cloud of possible states, moved and resampled in place. */
 interface Cloud {
   /** [particles, slots], in the record's own unit, and a copy to draw from. */
   readonly states: Float64Array;
@@ -43,7 +43,7 @@ export function particleLikelihood(model: ParticleModel, particles: number, stre
     for (; period < readings.periods[i]!; period++) move(model, cloud, period, stream);
     const s = readings.states[i]!;
     sum += weigh(cloud, s, readings.values[i]!, model.readingSd[s]! / readings.roots[i]!, dynamics.log);
-    drawAnew(cloud, stream);
+    resample(cloud, stream);
   }
   return sum;
 }
@@ -94,8 +94,13 @@ function weigh(
   return Math.log(sum / weights.length);
 }
 
-/** Draws as many particles by their weights, at equal spacings from one random place. */
-function drawAnew({ states, drawn, weights, slots }: Cloud, stream: RandomStream): void {
+/**
+ * Draws as many particles by their weights: the total is divided into equal shares, and one place is drawn within each
+ * (stratified resampling).
+ *
+ * @see Kitagawa, G. (1996), Journal of Computational and Graphical Statistics 5:1, for resampling by strata.
+ */
+function resample({ states, drawn, weights, slots }: Cloud, stream: RandomStream): void {
   const total = weights.reduce((sum, weight) => sum + weight, 0);
   const spacing = total / weights.length;
   let reached = weights[0]!;

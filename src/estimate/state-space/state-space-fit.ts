@@ -63,7 +63,7 @@ function described(rule: Rule, search: StateSpaceSearch, options: FitOptions, fo
     processError: spread(0),
     observationError: spread(states),
     ...filtering,
-    last: { mean: Array.from(space.belief.mean), covariance: Array.from(space.belief.covariance) },
+    last: { mean: Array.from(space.estimate.mean), covariance: Array.from(space.estimate.covariance) },
   };
   if (filtering.method === "exact" || options.intervals === "none") return { ...fitted, filter };
   const check = particleCheck(space, found.at, measures.criteria.logLikelihood);

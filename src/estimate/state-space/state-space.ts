@@ -10,7 +10,7 @@ import { type Readings, readingsOf } from "../rows/readings.js";
 import { slotsOf } from "../unknowns/slots.js";
 import { place, type Unknowns } from "../unknowns/unknowns.js";
 import { drawStateSpace } from "./draw-state-space.js";
-import { type Belief, type Dynamics, predict, scratch, takeIn } from "./kalman-step.js";
+import { type Dynamics, predict, type StateEstimate, scratch, update } from "./kalman-step.js";
 import { type LinearRule, linearFilter, longRun } from "./linear-filter.js";
 import type { ParticleModel } from "./particle-filter.js";
 
@@ -20,8 +20,8 @@ export interface StateSpace {
   readonly minusTwice: (at: Float64Array) => number;
   /** One-step predictions, as the values that the fit compares. */
   readonly rows: FitRows;
-  /** The belief after the last reading of the last evaluation. */
-  readonly belief: Belief;
+  /** The estimate after the last reading of the last evaluation. */
+  readonly estimate: StateEstimate;
   /** What particles need at the unknowns given. */
   readonly particleModel: (at: Float64Array) => ParticleModel;
   /** The first reading less the mean of readings in the long run, over their standard deviation; NaN without a long run. */
@@ -60,7 +60,10 @@ export function stateSpace(
 ): StateSpace {
   const dynamics = dynamicsOf(rule, group, options);
   const slots = slotsOf(rule).length;
-  const belief: Belief = { mean: new Float64Array(slots), covariance: new Float64Array(slots * slots) };
+  const estimate: StateEstimate = {
+    mean: new Float64Array(slots),
+    covariance: new Float64Array(slots * slots),
+  };
   const readings = readingsOf(rule, group, options, start === "known" ? unknowns.initial : undefined);
   const { parameters, spreads } = unknowns;
   const variance = new Float64Array(rule.states.length);
@@ -85,13 +88,13 @@ export function stateSpace(
           };
     if (first === undefined) return Number.NaN;
     const sum = linearFilter(linear, readings, from, first, told);
-    belief.mean[0] = first.mean;
-    belief.covariance[0] = first.variance;
+    estimate.mean[0] = first.mean;
+    estimate.covariance[0] = first.variance;
     return sum;
   };
   const extended = (told?: Predictions): number => {
-    beginAsRead(belief, readings, readingVariance);
-    return extendedFilter(belief, dynamics, parameters, readings, from, variance, readingVariance, told);
+    beginAsRead(estimate, readings, readingVariance);
+    return extendedFilter(estimate, dynamics, parameters, readings, from, variance, readingVariance, told);
   };
   const run = (at: Float64Array, told?: Predictions): number => {
     setDown(at);
@@ -102,7 +105,7 @@ export function stateSpace(
     deviation: new Float64Array(readings.count),
   };
   return {
-    belief,
+    estimate,
     minusTwice(at) {
       const sum = run(at);
       return Number.isFinite(sum) ? -2 * sum : Number.POSITIVE_INFINITY;
@@ -183,26 +186,26 @@ function linearAt(
   processVariance: number,
   readingVariance: number,
 ): LinearRule {
-  const belief = { mean: Float64Array.of(beginning[0]!), covariance: new Float64Array(1) };
-  predict(belief, dynamics, parameters, 0, new Float64Array(1));
+  const estimate = { mean: Float64Array.of(beginning[0]!), covariance: new Float64Array(1) };
+  predict(estimate, dynamics, parameters, 0, new Float64Array(1));
   const slope = dynamics.slopes[0]!;
-  return { slope, intercept: belief.mean[0]! - slope * beginning[0]!, processVariance, readingVariance };
+  return { slope, intercept: estimate.mean[0]! - slope * beginning[0]!, processVariance, readingVariance };
 }
 
 function beginAsRead(
-  belief: Belief,
+  estimate: StateEstimate,
   { beginning, beginningRoots, slotStates }: Readings,
   readingVariance: (state: number) => number,
 ): void {
   const slots = beginning.length;
-  belief.mean.set(beginning);
-  belief.covariance.fill(0);
+  estimate.mean.set(beginning);
+  estimate.covariance.fill(0);
   for (let i = 0; i < slots; i++)
-    belief.covariance[i * slots + i] = readingVariance(slotStates[i]!) / beginningRoots[i]! ** 2;
+    estimate.covariance[i * slots + i] = readingVariance(slotStates[i]!) / beginningRoots[i]! ** 2;
 }
 
 function extendedFilter(
-  belief: Belief,
+  estimate: StateEstimate,
   dynamics: Dynamics,
   parameters: Float64Array,
   readings: Readings,
@@ -214,14 +217,14 @@ function extendedFilter(
   let period = readings.first;
   let sum = 0;
   for (let i = from; i < readings.count; i++) {
-    for (; period < readings.periods[i]!; period++) predict(belief, dynamics, parameters, period, variance);
+    for (; period < readings.periods[i]!; period++) predict(estimate, dynamics, parameters, period, variance);
     const s = readings.states[i]!;
     const own = readingVariance(s) / readings.roots[i]! ** 2;
     if (told !== undefined) {
-      told.mean[i] = belief.mean[s]!;
-      told.deviation[i] = Math.sqrt(belief.covariance[s * (belief.mean.length + 1)]! + own);
+      told.mean[i] = estimate.mean[s]!;
+      told.deviation[i] = Math.sqrt(estimate.covariance[s * (estimate.mean.length + 1)]! + own);
     }
-    sum += takeIn(belief, dynamics, s, readings.values[i]!, own);
+    sum += update(estimate, dynamics, s, readings.values[i]!, own);
   }
   return sum;
 }

@@ -1,5 +1,5 @@
 import { type Fit, type FitProblem, type GroupFit, problemOf } from "../../estimate/index.js";
-import type { RandomStream } from "../../numeric/index.js";
+import { chiSquareCdf, chiSquareUpperTail, type RandomStream } from "../../numeric/index.js";
 import { autocorrelations } from "../statistics/autocorrelation.js";
 import { durbinWatson } from "../statistics/durbin-watson.js";
 import { boxPierce, ljungBox } from "../statistics/portmanteau.js";
@@ -87,27 +87,33 @@ function testsOfState(fit: Fit, group: GroupFit, state: string, all: Float64Arra
   ];
 }
 
-/** Quantile residuals are normal where the distribution is right, whichever it is; other residuals where errors are normal. */
+/**
+ * Quantile residuals are standard normal where the distribution is right, whichever it is: in shape, and in variance, of
+ * which the shape says nothing. Other residuals are normal where the errors are.
+ */
 function normality(
   problem: FitProblem,
   group: GroupFit,
   state: string,
   residuals: readonly number[],
 ): ResidualTest[] {
-  const found = shapiroWilk(residuals);
-  if (found === undefined) return [];
-  const quantiles = problem.group(group.group).tested === "quantile";
+  const shape = shapiroWilk(residuals);
+  const row = (kind: ResidualTestKind, name: string): ResidualTest[] =>
+    shape ? [testRow(state, kind, name, shape.statistic, shape.probability)] : [];
+  if (problem.group(group.group).tested !== "quantile") return row("normality", "Shapiro-Wilk");
   return [
-    quantiles
-      ? testRow(
-          state,
-          "distribution",
-          "Shapiro-Wilk of quantile residuals",
-          found.statistic,
-          found.probability,
-        )
-      : testRow(state, "normality", "Shapiro-Wilk", found.statistic, found.probability),
+    ...row("distribution", "Shapiro-Wilk of quantile residuals"),
+    ...variance(state, residuals, residuals.length * (1 - group.estimates.length / group.count)),
   ];
+}
+
+/** Whether standard normal residuals have the variance 1, two-sided; unknowns that were fitted take up some of it. */
+function variance(state: string, residuals: readonly number[], freedom: number): ResidualTest[] {
+  if (!(freedom > 0)) return [];
+  const squares = residuals.reduce((sum, residual) => sum + residual * residual, 0);
+  const tails = [chiSquareUpperTail(squares, freedom), chiSquareCdf(squares, freedom)];
+  const probability = 2 * Math.min(...tails);
+  return [testRow(state, "distribution", "Variance of quantile residuals", squares / freedom, probability)];
 }
 
 /** Levels that differ by no more than rounding have no scatter to change with. */

@@ -1,5 +1,5 @@
 import { type CommonParameters, type Fit, problemOf, testWords } from "../../estimate/index.js";
-import { chiSquareCdf } from "../../numeric/index.js";
+import { chiSquareUpperTail } from "../../numeric/index.js";
 import { notSeveralGroups } from "../refusals.js";
 
 /** Whether all groups of a record have the same parameters of a rule. */
@@ -35,7 +35,7 @@ export function sameParameters(fit: Fit): SameParameters {
   const [combined, separate] = [other("combined"), other("separate")];
   const statistic = Math.max(0, 2 * (separate.criteria.logLikelihood - combined.criteria.logLikelihood));
   const degreesOfFreedom = separate.criteria.counted - combined.criteria.counted;
-  const probability = 1 - chiSquareCdf(statistic, degreesOfFreedom);
+  const probability = chiSquareUpperTail(statistic, degreesOfFreedom);
   const test = combined.commonParameters;
   return {
     kind: "same-parameters",

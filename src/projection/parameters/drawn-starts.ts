@@ -145,17 +145,17 @@ export function drawnStarts(
 }
 
 /** The first state vector of a path: known, or drawn from what a filter believes of it. */
-function beginning({ belief, initial }: FitGround): (stream: RandomStream) => Float64Array {
+function beginning({ filtered, initial }: FitGround): (stream: RandomStream) => Float64Array {
   const size = initial.length;
-  const factor = belief && choleskyFactor(belief.covariance, size);
-  if (belief === undefined || factor === undefined) return () => initial;
+  const factor = filtered && choleskyFactor(filtered.covariance, size);
+  if (filtered === undefined || factor === undefined) return () => initial;
   const normals = new Float64Array(size);
   return (stream) => {
     for (let i = 0; i < size; i++) normals[i] = stream.normal();
-    return Float64Array.from(belief.mean, (mean, i) => {
+    return Float64Array.from(filtered.mean, (mean, i) => {
       let value = mean;
       for (let k = 0; k <= i; k++) value += factor[i * size + k]! * normals[k]!;
-      return belief.scale.from(value);
+      return filtered.scale.from(value);
     });
   };
 }
