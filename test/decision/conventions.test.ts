@@ -53,6 +53,18 @@ describe("a quantity of a period is worked out from the states before it", () =>
     expect(asked.sentence).not.toContain("every path");
   });
 
+  test("and a later one that no path has is told without that reason", () => {
+    // P(D > 60) is below 1e-30 for D Poisson of mean 6 (SciPy), so no path is ever short.
+    const asked = tradeoff(store, {
+      ...stocked,
+      values: [60],
+      answers: { short: { level: "short", at: 3 } },
+    });
+    expect(asked.sentence).toContain(
+      "is the same on every path, so it does not depend on chance there (a quantity of period k is worked out from the states at the end of period k-1).",
+    );
+  });
+
   test("and a measure ahead begins at period 1", () => {
     expect(() =>
       tradeoff(store, { ...stocked, values: [5], answers: { demand: { level: "demand", at: 0 } } }),
