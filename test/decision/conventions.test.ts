@@ -73,6 +73,15 @@ describe("a quantity of a period is worked out from the states before it", () =>
     );
   });
 
+  test("and counts whole periods, the first of a window before its last", () => {
+    const ask = (measure: object) => () =>
+      tradeoff(store, { ...stocked, values: [5], answers: { asked: measure as never } });
+    expect(ask({ level: "cost", at: 1.5 })).toThrow(
+      "Period 1.5 ahead was asked for, and the projection has whole periods 1 to 3. Give a whole number.",
+    );
+    expect(ask({ total: "cost", from: 3, to: 2 })).toThrow("Give a `from` that is not after `to`.");
+  });
+
   test("and has no random change of its own", () => {
     const ask = (noise: object) => () =>
       tradeoff(store, {
