@@ -59,6 +59,11 @@ export function measureNameError(name: string, known: readonly string[]): ModelE
   });
 }
 
+function windowHelp(from: number, to: number): string {
+  if (!Number.isInteger(from) || !Number.isInteger(to)) return "Give a whole number.";
+  return from > to ? "Give a `from` that is not after `to`." : "Give more `periods`, or an earlier one.";
+}
+
 export function measureWindowError(from: number, to: number, ahead: number): ModelError {
   if (from < 1)
     return new ModelError(
@@ -69,7 +74,7 @@ export function measureWindowError(from: number, to: number, ahead: number): Mod
   const asked = from === to ? `Period ${from} ahead was` : `Periods ${from} to ${to} ahead were`;
   return new ModelError(
     "outside-projection",
-    `${asked} asked for, and the projection has whole periods 1 to ${ahead}. Give more \`periods\`, or an earlier one.`,
+    `${asked} asked for, and the projection has whole periods 1 to ${ahead}. ${windowHelp(from, to)}`,
     { from, to, ahead },
   );
 }

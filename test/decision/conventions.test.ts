@@ -53,12 +53,33 @@ describe("a quantity of a period is worked out from the states before it", () =>
     expect(asked.sentence).not.toContain("every path");
   });
 
+  test("and a later one that no path has is told without that reason", () => {
+    // P(D > 60) is below 1e-30 for D Poisson of mean 6 (SciPy), so no path is ever short.
+    const asked = tradeoff(store, {
+      ...stocked,
+      values: [60],
+      answers: { short: { level: "short", at: 3 } },
+    });
+    expect(asked.sentence).toContain(
+      "is the same on every path, so it does not depend on chance there (a quantity of period k is worked out from the states at the end of period k-1).",
+    );
+  });
+
   test("and a measure ahead begins at period 1", () => {
     expect(() =>
       tradeoff(store, { ...stocked, values: [5], answers: { demand: { level: "demand", at: 0 } } }),
     ).toThrow(
       "A measure looks ahead, from period 1 on; 0 was given. Give a period of 1 to 3; the present value is in the result of `forecast` at the record's end, and of `simulate` in its first row.",
     );
+  });
+
+  test("and counts whole periods, the first of a window before its last", () => {
+    const ask = (measure: object) => () =>
+      tradeoff(store, { ...stocked, values: [5], answers: { asked: measure as never } });
+    expect(ask({ level: "cost", at: 1.5 })).toThrow(
+      "Period 1.5 ahead was asked for, and the projection has whole periods 1 to 3. Give a whole number.",
+    );
+    expect(ask({ total: "cost", from: 3, to: 2 })).toThrow("Give a `from` that is not after `to`.");
   });
 
   test("and has no random change of its own", () => {

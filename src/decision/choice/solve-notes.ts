@@ -49,9 +49,11 @@ export function stillNotes(
   if (kind === "parameter" || mayAgree) return [];
   const same = `${opened(measureWords(measure, context))} is the same on every path, so it does not depend on chance there`;
   if (context.rule.states.includes(name)) return [`${same}.`];
-  return [
-    `${same}: a quantity of period k is worked out from the states at the end of period k-1, before the chance of period k.`,
-  ];
+  const convention = "a quantity of period k is worked out from the states at the end of period k-1";
+  // Later the paths may agree for another reason, as where a stock is never short.
+  return lastRead(context, measure, value) === context.ground.present + 1
+    ? [`${same}: ${convention}, before the chance of period k.`]
+    : [`${same} (${convention}).`];
 }
 
 /**
