@@ -1,6 +1,7 @@
 import type { Warning } from "../numeric/index.js";
 import type { Observations } from "../record/index.js";
 import type { Rule } from "../rule/index.js";
+import { missingArgumentError } from "./errors.js";
 import { type CommonParameters, commonParametersWarnings } from "./fits/common-parameters.js";
 import { fitGroups } from "./fits/fit-group.js";
 import { checkOptions } from "./options/check-options.js";
@@ -11,7 +12,6 @@ import { matchStates } from "./options/match-states.js";
 import { matchNotes, unitWarnings } from "./options/record-against-rule.js";
 import { recordWarnings } from "./options/record-warnings.js";
 import { type FitProblem, fitProblem } from "./problem/fit-problem.js";
-import { refuseMissingArgument } from "./refusals.js";
 import type { Criteria } from "./result/criteria.js";
 import type { Estimate } from "./result/estimate-of.js";
 import type { GroupFit } from "./result/group-fit.js";
@@ -57,8 +57,8 @@ export interface Fit {
  * fit(crowding, counts, { errors: "observation" }).groups[0].stop.kind; // "converged"
  */
 export function fit(rule: Rule, observations: Observations, options: FitOptions): Fit {
-  if (rule?.kind !== "rule") throw refuseMissingArgument("rule");
-  if (observations?.kind !== "observations") throw refuseMissingArgument("record");
+  if (rule?.kind !== "rule") throw missingArgumentError("rule");
+  if (observations?.kind !== "observations") throw missingArgumentError("record");
   checkOptions(rule, options);
   const matched = matchStates(rule, observations);
   const unitsDisagree = unitWarnings(rule, matched, options);

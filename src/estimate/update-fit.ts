@@ -1,7 +1,7 @@
 import { joined, type Observations } from "../record/index.js";
+import { noNewRowsError, unknownNameError } from "./errors.js";
 import { type Fit, problemOf } from "./fit.js";
 import { matchStates } from "./options/match-states.js";
-import { refuseNoNewRows, refuseUnknownName } from "./refusals.js";
 
 /** How one estimate changed when rows were added. */
 export interface EstimateChange {
@@ -42,11 +42,10 @@ const notable = 2;
 export function updateFit(before: Fit, later: Observations): UpdatedFit {
   const more = matchStates(before.rule, later);
   const known = before.observations.groups.map((group) => group.name);
-  for (const { name } of more.groups)
-    if (!known.includes(name)) throw refuseUnknownName(name, known, "group");
+  for (const { name } of more.groups) if (!known.includes(name)) throw unknownNameError(name, known, "group");
   const added: Record<string, number> = {};
   for (const name of known) added[name] = more.groups.find((each) => each.name === name)?.index.length ?? 0;
-  if (Object.values(added).every((count) => count === 0)) throw refuseNoNewRows();
+  if (Object.values(added).every((count) => count === 0)) throw noNewRowsError();
   const now = problemOf(before).refit({ observations: joined(before.observations, more) });
   const changes = before.groups.flatMap((was, g) => changesOf(was, now.groups[g]!));
   const remarks = changes

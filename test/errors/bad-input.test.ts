@@ -73,7 +73,7 @@ test("too few rows", async () => {
   );
   expect(message).toMatchInlineSnapshot(`
     "ModelError too-few-observations
-    5 usable values for 3 unknowns (r, K, N[0]): not fitted. At least 6 are needed; use a rule with fewer parameters, fix some with { fixed }, or wait for more rows."
+    5 usable values for 3 unknowns (r, K, N[0]): not fitted. At least 6 are needed: use a rule with fewer parameters, hold some with \`fixed\`, or collect more data."
   `);
 });
 
@@ -83,7 +83,7 @@ test("all values equal", async () => {
   );
   expect(message).toMatchInlineSnapshot(`
     "ModelError no-change
-    The value never changes (it is 12 in every row): a multiplier of 1 cannot be separated from no process at all. Check the column, or wait for a record that moves."
+    The value never changes (it is 12 in every row): a multiplier of 1 cannot be separated from no process at all. Check the column, or collect more data."
   `);
 });
 
@@ -94,6 +94,6 @@ test("a rule that leaves the finite range", async () => {
   );
   expect(message).toMatchInlineSnapshot(`
     "ModelError no-finite-start
-    No parameters were found at which "N[t+1] = exp(a*N) + 1e200*N" stays finite over the record. Give { start: { ... } } near plausible values, or { bounds: { ... } } that keep the rule in its range."
+    No parameters were found at which "N[t+1] = exp(a*N) + 1e200*N" stays finite over the record. Give \`start\` near plausible values, as \`start: { r: 0.5 }\`, or \`bounds\` that keep the rule in its range."
   `);
 });

@@ -1,7 +1,7 @@
 import type { ObservedGroup } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
+import { noStartError, tooFewError } from "../errors.js";
 import type { FitOptions } from "../options/fit-options.js";
-import { refuseNoStart, refuseTooFew } from "../refusals.js";
 import { criteria } from "../result/criteria.js";
 import { describeFit } from "../result/describe-fit.js";
 import { estimatesOf } from "../result/estimate-of.js";
@@ -30,10 +30,10 @@ export function combinedFit(rule: Rule, groups: readonly ObservedGroup[], option
     maps,
     all.names.length,
   );
-  if (rows.count < rows.size + 3) throw refuseTooFew(groups[0]!, rows.count, all.names, "values");
+  if (rows.count < rows.size + 3) throw tooFewError(groups[0]!, rows.count, all.names, "values");
   const starts = groups.map((group, g) => startingPoints(rule, group, options, own[g]!, parts[g]!));
   const usable = starts.filter((points) => points.length > 0);
-  if (usable.length < groups.length) throw refuseNoStart(groups[0]!, rule.text);
+  if (usable.length < groups.length) throw noStartError(groups[0]!, rule.text);
   const begun = usable.map((points) => joinedStart(points[0]!, starts, maps, rows.size));
   const cutAt = (sum: number): ReturnType<typeof cutOf> => cutOf(sum, rows.count, rows.size, options);
   const objective = squaresObjective(normalEquations(rows), rows);

@@ -1,10 +1,10 @@
 import type { ObservedGroup } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
+import { noStartError, stepFromZeroError, togetherError } from "../errors.js";
 import { checkGroup, checkRecorded } from "../options/check-group.js";
 import type { FitOptions } from "../options/fit-options.js";
 import type { Search } from "../problem/search.js";
 import { kindOf, searchOf } from "../problem/search-of.js";
-import { refuseNoStart, refuseStepsFromZero, refuseTogether } from "../refusals.js";
 import { addedCriteria } from "../result/criteria.js";
 import { describeFit } from "../result/describe-fit.js";
 import type { GroupFit } from "../result/group-fit.js";
@@ -35,7 +35,7 @@ function noStart(rule: Rule, { group, family }: Search, options: FitOptions): Er
   const column = group.values[rule.states[0]!]!;
   const from = column.findIndex((value, row) => value === 0 && column[row + 1]! > 0);
   const stuck = family?.counts === true && options.errors === "process" && from >= 0;
-  return stuck ? refuseStepsFromZero(group, group.rows[from]!, rule.text) : refuseNoStart(group, rule.text);
+  return stuck ? stepFromZeroError(group, group.rows[from]!, rule.text) : noStartError(group, rule.text);
 }
 
 /** Fits all groups of a record: each on its own, with the same parameters, or with parameters from a population. */
@@ -45,7 +45,7 @@ export function fitGroups(rule: Rule, groups: readonly ObservedGroup[], options:
     const apart = groups.map((group) => fitGroup(rule, group, options));
     return { groups: apart, criteria: addedCriteria(apart.map(({ criteria }) => criteria!)) };
   }
-  if (groups.some((group) => kindOf(rule, group, options) !== "least-squares")) throw refuseTogether(how);
+  if (groups.some((group) => kindOf(rule, group, options) !== "least-squares")) throw togetherError(how);
   for (const group of groups) checkRecorded(rule, group, options);
   return how === "combined" ? combinedFit(rule, groups, options) : mixedFit(rule, groups, options);
 }

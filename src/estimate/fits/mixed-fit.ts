@@ -6,9 +6,9 @@ import {
 } from "../../numeric/index.js";
 import type { ObservedGroup } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
+import { fewGroupsError, noStartError } from "../errors.js";
 import { memberCovariance } from "../intervals/member-covariance.js";
 import type { FitOptions } from "../options/fit-options.js";
-import { refuseFewGroups, refuseNoStart } from "../refusals.js";
 import { criteriaOf } from "../result/criteria.js";
 import { describeFit } from "../result/describe-fit.js";
 import { estimatesOf } from "../result/estimate-of.js";
@@ -40,7 +40,7 @@ interface Member {
  * @see Pinheiro and Bates (2000), Mixed-Effects Models in S and S-PLUS, section 7.2: the Laplace approximation.
  */
 export function mixedFit(rule: Rule, groups: readonly ObservedGroup[], options: FitOptions): JointFit {
-  if (groups.length < 3) throw refuseFewGroups(groups.length);
+  if (groups.length < 3) throw fewGroupsError(groups.length);
   const parameters = unknownsOf(rule, options).roles.filter((role) => role === "parameter").length;
   const penalty: Penalty = { means: new Float64Array(parameters), roots: new Float64Array(parameters) };
   const members = groups.map((group) => member(rule, group, options, penalty));
@@ -102,7 +102,7 @@ function member(rule: Rule, group: ObservedGroup, options: FitOptions, penalty: 
   const own = unknownsOf(rule, options);
   const part = prepared(rule, group, own, options);
   const [start] = startingPoints(rule, group, options, own, part);
-  if (start === undefined) throw refuseNoStart(group, rule.text);
+  if (start === undefined) throw noStartError(group, rule.text);
   const workspace = squaresWorkspace(own.names.length);
   const { lower, upper } = own;
   let at = start;

@@ -1,7 +1,7 @@
 import { type RunHooks, randomStream, type Tick, ticker } from "../../numeric/index.js";
+import { fewDrawsError, groupError, notBySquaresError, unknownNameError } from "../errors.js";
 import { type Fit, problemOf } from "../fit.js";
 import type { RecordDraw, Refitter } from "../problem/refitter.js";
-import { groupError, refuseFewDraws, refuseNotBySquares, refuseUnknownName } from "../refusals.js";
 import type { GroupFit } from "../result/group-fit.js";
 import type { Interval } from "./interval.js";
 
@@ -33,18 +33,18 @@ const halvings = 10;
  */
 export function gridInterval(fit: Fit, name: string, options: GridIntervalOptions = {}): Interval {
   const { resamples: draws = 399, seed = 1, level = problemOf(fit).level } = options;
-  if (!(Number.isInteger(draws) && draws >= 20)) throw refuseFewDraws(draws);
+  if (!(Number.isInteger(draws) && draws >= 20)) throw fewDrawsError(draws);
   const fitted = groupNamed(fit, options.group);
   const i = fitted.estimates.findIndex((each) => each.name === name);
   if (i < 0)
-    throw refuseUnknownName(
+    throw unknownNameError(
       name,
       fitted.estimates.map((each) => each.name),
       "estimated parameter",
     );
   const group = problemOf(fit).group(fitted.group);
   const again = group.kind === "least-squares" ? group.refitter() : undefined;
-  if (again?.draw === undefined) throw refuseNotBySquares("gridInterval");
+  if (again?.draw === undefined) throw notBySquaresError("gridInterval");
   const tick = ticker(options, 2 * (halvings + 2) * draws);
   const ordinary = ordinaryAt(again, again.draw, fitted, i, { draws, seed, tick });
   const tail = (1 - level) / 2;

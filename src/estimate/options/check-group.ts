@@ -1,17 +1,17 @@
 import { inputByPeriod, type ObservedGroup } from "../../record/index.js";
 import { inputOffsets, type Rule } from "../../rule/index.js";
 import {
-  refuseAllCensored,
-  refuseFilteredLimit,
-  refuseInputGap,
-  refuseMissingInput,
-  refuseNoChange,
-  refuseNoCount,
-  refuseNoLogarithm,
-  refuseSdColumn,
-  refuseSdValue,
-  refuseTooFew,
-} from "../refusals.js";
+  allCensoredError,
+  filteredLimitError,
+  inputGapError,
+  missingInputError,
+  noChangeError,
+  noLogarithmError,
+  notCountError,
+  sdColumnError,
+  sdValueError,
+  tooFewError,
+} from "../errors.js";
 import { recordedPairs } from "../rows/recorded-pairs.js";
 import { longestLag } from "../unknowns/slots.js";
 import type { Unknowns } from "../unknowns/unknowns.js";
@@ -36,19 +36,19 @@ export function checkRecorded(rule: Rule, group: ObservedGroup, options: FitOpti
 function checkNumber(rule: Rule, group: ObservedGroup, options: FitOptions, names: readonly string[]): void {
   const pairs = options.errors === "process";
   const usable = pairs ? recordedPairs(rule, group).to.length : group.index.length;
-  if (usable < names.length + 3) throw refuseTooFew(group, usable, names, pairs ? "pairs" : "values");
+  if (usable < names.length + 3) throw tooFewError(group, usable, names, pairs ? "pairs" : "values");
 }
 
 /** Every input must be recorded in every period that a fitted step reads. */
 function checkInputs(rule: Rule, group: ObservedGroup, options: FitOptions): void {
   const reach = rule.inputs.length === 0 ? [] : inputOffsets(rule);
   rule.inputs.forEach((name, k) => {
-    if (!group.inputs[name]) throw refuseMissingInput(name, group);
+    if (!group.inputs[name]) throw missingInputError(name, group);
     const [earliest, latest] = reach[k]!;
     const column = inputByPeriod(group, name);
     for (const period of steppedPeriods(rule, group, options))
       for (let at = period + earliest; at <= period + latest; at++)
-        if (!Number.isFinite(column[at])) throw refuseInputGap(name, group, at);
+        if (!Number.isFinite(column[at])) throw inputGapError(name, group, at);
   });
 }
 
@@ -56,9 +56,9 @@ function checkInputs(rule: Rule, group: ObservedGroup, options: FitOptions): voi
 function checkSd(group: ObservedGroup, { sd }: FitOptions): void {
   if (typeof sd !== "string") return;
   const column = group.inputs[sd];
-  if (column === undefined) throw refuseSdColumn(sd, Object.keys(group.inputs));
+  if (column === undefined) throw sdColumnError(sd, Object.keys(group.inputs));
   const bad = column.findIndex((each) => !(each > 0 && Number.isFinite(each)));
-  if (bad >= 0) throw refuseSdValue(sd, group, group.rows[bad]!, column[bad]!);
+  if (bad >= 0) throw sdValueError(sd, group, group.rows[bad]!, column[bad]!);
 }
 
 /** The periods from which the fit takes a step. */
@@ -74,13 +74,13 @@ function checkState(group: ObservedGroup, state: string, options: FitOptions): v
   const values = group.values[state]!;
   const censoring = group.censoring?.[state];
   if (values.every((value) => value === values[0]) && !censoring?.some((mark) => mark !== 0))
-    throw refuseNoChange(group, values[0]!);
+    throw noChangeError(group, values[0]!);
   const counts = options.distribution === "poisson" || options.distribution === "negative-binomial";
   const wrong = (value: number): boolean =>
     onLogScale(options) ? value <= 0 : counts && !(value >= 0 && Number.isInteger(value));
   const bad = values.findIndex(wrong);
   if (bad < 0) return;
-  const refuse = counts ? refuseNoCount : refuseNoLogarithm;
+  const refuse = counts ? notCountError : noLogarithmError;
   throw refuse(group, group.rows[bad]!, values[bad]!);
 }
 
@@ -88,8 +88,8 @@ function checkCensoring(group: ObservedGroup, state: string, { errors }: FitOpti
   const censoring = group.censoring?.[state];
   if (!censoring) return;
   const marked = censoring.findIndex((mark) => mark !== 0);
-  if (errors === "both" && marked >= 0) throw refuseFilteredLimit(group, state, group.rows[marked]!);
+  if (errors === "both" && marked >= 0) throw filteredLimitError(group, state, group.rows[marked]!);
   const sides = new Set(censoring);
   if (sides.has(0) || sides.size > 1) return;
-  throw refuseAllCensored(group, state, sides.has(1) ? "above" : "below");
+  throw allCensoredError(group, state, sides.has(1) ? "above" : "below");
 }

@@ -1,6 +1,6 @@
 import type { Observations, ObservedGroup } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
-import { refuseUnmatchedStates } from "../refusals.js";
+import { unmatchedStatesError } from "../errors.js";
 
 /** The record with its states named as the rule names them; one state and one recorded value match as they are. */
 export function matchStates(rule: Rule, observations: Observations): Observations {
@@ -9,7 +9,7 @@ export function matchStates(rule: Rule, observations: Observations): Observation
   const [state] = rule.states;
   const [only] = observations.states;
   if (rule.states.length !== 1 || observations.states.length !== 1 || !state || !only)
-    throw refuseUnmatchedStates(rule.states, recorded);
+    throw unmatchedStatesError(rule.states, recorded);
   return {
     ...observations,
     states: [{ ...only, name: state }],

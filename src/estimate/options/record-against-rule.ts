@@ -1,7 +1,7 @@
 import type { Warning } from "../../numeric/index.js";
 import type { Observations } from "../../record/index.js";
 import { type Rule, unitClash } from "../../rule/index.js";
-import { unitScaleError } from "../refusals.js";
+import { unitScaleError } from "../errors.js";
 import type { FitOptions } from "./fit-options.js";
 
 /**

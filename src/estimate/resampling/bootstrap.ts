@@ -6,10 +6,10 @@ import {
   type Tick,
   ticker,
 } from "../../numeric/index.js";
+import { fewDrawsError, noDrawsError, sharedParametersError } from "../errors.js";
 import { type Fit, problemOf } from "../fit.js";
 import type { Interval } from "../intervals/interval.js";
 import type { RecordDraw, Refitter } from "../problem/refitter.js";
-import { refuseFewDraws, refuseNoDraws, refuseSharedParameters } from "../refusals.js";
 import type { GroupFit } from "../result/group-fit.js";
 import { type ResampledErrors, residualDraw } from "./residual-draw.js";
 
@@ -63,7 +63,7 @@ export interface Bootstrap {
  */
 export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
   const { errors = "parametric", resamples = 999, seed = 1 } = options;
-  if (!(Number.isInteger(resamples) && resamples >= 20)) throw refuseFewDraws(resamples);
+  if (!(Number.isInteger(resamples) && resamples >= 20)) throw fewDrawsError(resamples);
   const problem = problemOf(fit);
   let stream = randomStream(seed);
   const tick = ticker(options, fit.groups.length * resamples);
@@ -72,9 +72,9 @@ export function bootstrap(fit: Fit, options: BootstrapOptions = {}): Bootstrap {
     const own = stream;
     stream = stream.jump();
     const again = problem.group(fitted.group).refitter();
-    if (again === undefined) throw refuseSharedParameters();
+    if (again === undefined) throw sharedParametersError();
     const draw = errors === "parametric" ? again.draw : residualDraw(again, errors, options.block);
-    if (draw === undefined) throw refuseNoDraws();
+    if (draw === undefined) throw noDrawsError();
     const refits = refitsOf(again, draw, resamples, tick, own);
     used += refits.length;
     return rowsOf(fitted, refits, options.level ?? problem.level);

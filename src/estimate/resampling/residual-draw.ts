@@ -1,6 +1,6 @@
 import type { RandomStream } from "../../numeric/index.js";
+import { noResidualsError } from "../errors.js";
 import type { RecordDraw, Refitter } from "../problem/refitter.js";
-import { refuseNoResiduals } from "../refusals.js";
 
 /** How errors of simulated records are drawn. */
 export type ResampledErrors = "parametric" | "residual" | "block";
@@ -17,7 +17,7 @@ export function residualDraw(
   block: number | undefined,
 ): RecordDraw {
   const { rows, at, disturb } = again;
-  if (disturb === undefined) throw refuseNoResiduals();
+  if (disturb === undefined) throw noResidualsError();
   const { count, size, roots } = rows;
   rows.prepare(at, false);
   const residuals = Float64Array.from({ length: count }, (_, i) => rows.residualAt(i));

@@ -42,7 +42,7 @@ function stopWarning(fit: Omit<GroupFit, "warnings">): Warning[] {
   return [
     {
       code: "not-converged",
-      message: `The search did not converge (${why}): read the estimates as a last state, not as a fit. Give { start } or { bounds }.`,
+      message: `The fit did not converge (${why}); do not use these estimates. Give \`start\` or \`bounds\`.`,
     },
   ];
 }
@@ -114,7 +114,7 @@ function rivals(fit: Omit<GroupFit, "warnings">): Warning[] {
   return [
     {
       code: "two-optima",
-      message: `Different parameters explain the record almost equally: ${told.join("; ")}. Give { start } or { bounds } if one can be ruled out.`,
+      message: `Different parameters explain the record almost equally: ${told.join("; ")}. Give \`start\` or \`bounds\` if one can be ruled out.`,
     },
   ];
 }
@@ -127,7 +127,7 @@ function bends(fit: Omit<GroupFit, "warnings">, rule: Rule): Warning[] {
   return [
     {
       code: "on-a-bend",
-      message: `The fit sits where the rule bends, at ${bend.function}(...): its standard errors do not hold there. Read the profiles.`,
+      message: `The optimum lies at a kink of the rule, at ${bend.function}(...): its standard errors do not hold there. Read the profiles.`,
     },
   ];
 }

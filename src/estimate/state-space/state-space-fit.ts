@@ -1,9 +1,9 @@
 import { randomStream, type Warning } from "../../numeric/index.js";
 import type { ObservedGroup } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
+import { noStartError } from "../errors.js";
 import type { FitOptions } from "../options/fit-options.js";
 import { knownSd } from "../problem/noise.js";
-import { refuseNoStart } from "../refusals.js";
 import { describeFit } from "../result/describe-fit.js";
 import type { GroupFit } from "../result/group-fit.js";
 import { type Optimum, optimum } from "../search/optimum.js";
@@ -25,7 +25,7 @@ export function stateSpaceFit(rule: Rule, group: ObservedGroup, options: FitOpti
   const search = stateSpaceSearch(rule, group, options);
   const settled = search.filtering.method === "exact" && search.filtering.start === "diffuse";
   const fitted = (settled ? fromLongRun(rule, search, options) : undefined) ?? solved(rule, search, options);
-  if (fitted === undefined) throw refuseNoStart(group, rule.text);
+  if (fitted === undefined) throw noStartError(group, rule.text);
   return fitted;
 }
 

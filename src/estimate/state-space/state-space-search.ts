@@ -1,9 +1,9 @@
 import type { ObservedGroup } from "../../record/index.js";
 import type { Rule } from "../../rule/index.js";
+import { partOfStartError } from "../errors.js";
 import type { FitOptions } from "../options/fit-options.js";
 import { scaleOf } from "../problem/scale.js";
 import type { Search } from "../problem/search.js";
-import { refusePartOfStart } from "../refusals.js";
 import { criteriaOf } from "../result/criteria.js";
 import type { FitRows } from "../rows/fit-rows.js";
 import { likelihoodCut } from "../search/cut.js";
@@ -89,7 +89,7 @@ function filteringOf(
 function isKnown(rule: Rule, { initial }: Unknowns): boolean {
   if (initial.every(Number.isNaN)) return false;
   const open = slotsOf(rule).filter((_, s) => Number.isNaN(initial[s]));
-  if (open.length > 0) throw refusePartOfStart(rule.states, open);
+  if (open.length > 0) throw partOfStartError(rule.states, open);
   return true;
 }
 

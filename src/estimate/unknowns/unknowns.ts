@@ -1,6 +1,6 @@
 import type { Rule } from "../../rule/index.js";
+import { checkNames } from "../options/check-names.js";
 import type { FitOptions } from "../options/fit-options.js";
-import { refuseStrangers } from "../options/refuse-strangers.js";
 import { type Slot, slotsOf } from "./slots.js";
 
 /** What an unknown stands for. */
@@ -36,7 +36,7 @@ export function unknownsOf(rule: Rule, options: FitOptions, spreads: readonly st
   const fixed = { ...rule.fixed, ...options.fixed };
   const bounds = { ...rule.bounds, ...options.bounds };
   const slots = slotsOf(rule);
-  refuseStrangers(rule, options, slots);
+  checkNames(rule, options, slots);
   const known = slots.map((slot) => knownInitial(rule, options, slot));
   const afterParameters = rule.parameters.length;
   const afterSlots = afterParameters + slots.length;

@@ -18,33 +18,33 @@ const said = (rule: Rule, observations: Observations, options: FitOptions): stri
 
 test("a fit that does not say where it puts the error", () => {
   expect(said(sheltered, grown, {} as FitOptions)).toMatchInlineSnapshot(
-    `"A fit states where it puts the error. Give { errors: "observation" } when the scatter lies in the reading, or { errors: "process" } when it lies in the change itself, { errors: "both" } when neither can be left out."`,
+    `"\`errors\` is required: "observation" when the scatter lies in the readings, "process" when it lies in the change itself, "both" when neither can be left out. Write \`errors: "observation"\`."`,
   );
 });
 
 test("fewer values than unknowns + 3", () => {
   expect(said(sheltered, record({ N: [10, 14, 19, 26] }), trajectory)).toMatchInlineSnapshot(
-    `"4 usable values for 3 unknowns (R, K, N[0]): not fitted. At least 6 are needed; use a rule with fewer parameters, fix some with { fixed }, or wait for more rows."`,
+    `"4 usable values for 3 unknowns (R, K, N[0]): not fitted. At least 6 are needed: use a rule with fewer parameters, hold some with \`fixed\`, or collect more data."`,
   );
 });
 
 test("a value that never changes", () => {
   expect(said(sheltered, record({ N: [5, 5, 5, 5, 5, 5, 5] }), trajectory)).toMatchInlineSnapshot(
-    `"The value never changes (it is 5 in every row): a multiplier of 1 cannot be separated from no process at all. Check the column, or wait for a record that moves."`,
+    `"The value never changes (it is 5 in every row): a multiplier of 1 cannot be separated from no process at all. Check the column, or collect more data."`,
   );
 });
 
 test("a level without logarithm", () => {
   const zero = record({ N: [10, 14, 0, 26, 35, 46, 58, 70] });
   expect(said(sheltered, zero, { ...trajectory, distribution: "lognormal" })).toMatchInlineSnapshot(
-    `"Row 3: level 0 has no logarithm, which a lognormal distribution needs. Choose { distribution: "normal" }, or leave the row out with a reason."`,
+    `"Row 3: level 0 has no logarithm, which a lognormal distribution needs. Choose \`distribution: "normal"\`, or leave the row out with a reason."`,
   );
 });
 
 test("values that are no counts", () => {
   const half = record({ N: [10, 14, 19.5, 26, 35, 46, 58, 70] });
   expect(said(sheltered, half, { ...trajectory, distribution: "poisson" })).toMatchInlineSnapshot(
-    `"Row 3: 19.5 is not a count, which a Poisson or negative binomial distribution needs. Give whole numbers from 0, or choose { distribution: "normal" } or { distribution: "lognormal" }."`,
+    `"Row 3: 19.5 is not a count, which a Poisson or negative binomial distribution needs. Give whole numbers from 0, or choose \`distribution: "normal"\` or \`distribution: "lognormal"\`."`,
   );
 });
 
@@ -67,13 +67,13 @@ test("a rule that explodes wherever it is begun", () => {
   const explosive = recurrence("N[t+1] = N*exp(r*N)");
   const options: FitOptions = { ...trajectory, start: { r: 5 }, initial: { N: 10 } };
   expect(said(explosive, grown, options)).toMatchInlineSnapshot(
-    `"No parameters were found at which "N[t+1] = N*exp(r*N)" stays finite over the record. Give { start: { ... } } near plausible values, or { bounds: { ... } } that keep the rule in its range."`,
+    `"No parameters were found at which "N[t+1] = N*exp(r*N)" stays finite over the record. Give \`start\` near plausible values, as \`start: { r: 0.5 }\`, or \`bounds\` that keep the rule in its range."`,
   );
 });
 
 test("a rule that jumps", () => {
   expect(said(recurrence("N[t+1] = round(R*N, 0)"), grown, trajectory)).toMatchInlineSnapshot(
-    `""N[t+1] = round(R*N, 0)" jumps at round(...), so its parameters have no best value that a search could find: small changes of them change nothing, and then a whole step. Fit the rule without the rounding; keep it for schedules and projections."`,
+    `""N[t+1] = round(R*N, 0)" jumps at round(...), so no search can find the best values of its parameters: small changes of them change nothing, and then a whole step. Fit the rule without the rounding; keep it for schedules and projections."`,
   );
 });
 
@@ -109,7 +109,7 @@ test("spreads and factors that no fit has", () => {
     `"Option \`distribution\` must be "normal", "lognormal", "poisson" or "negative-binomial"; poisson with errors in both was given. Counts go with \`errors: "process"\` or \`errors: "observation"\`."`,
   );
   expect(said(sheltered, grown, { errors: "process", factor: { N: "q" } })).toMatchInlineSnapshot(
-    `"A factor of the record is found from whole trajectories, not with errors: "process". Use { errors: "observation" }, or write the factor into the rule."`,
+    `"Option \`factor\` needs whole trajectories, and \`errors: "process"\` was given. Write \`errors: "observation"\`, or write the factor into the rule."`,
   );
 });
 

@@ -1,41 +1,41 @@
 import type { Rule } from "../../rule/index.js";
 import {
-  refuseReversedBounds,
-  refuseStartOutsideBounds,
-  refuseTakenFactor,
-  refuseUnknownName,
-} from "../refusals.js";
+  reversedBoundsError,
+  startOutsideBoundsError,
+  takenFactorError,
+  unknownNameError,
+} from "../errors.js";
 import type { Slot } from "../unknowns/slots.js";
 import type { FitOptions } from "./fit-options.js";
 
 /** Refuses options that name what the rule does not have, and starts outside their bounds. */
-export function refuseStrangers(rule: Rule, options: FitOptions, slots: readonly Slot[]): void {
+export function checkNames(rule: Rule, options: FitOptions, slots: readonly Slot[]): void {
   const initials = slots.map(({ name }) => name);
   const factors = Object.values(options.factor ?? {});
-  refuseOthers(options.fixed, rule.parameters, "parameter");
-  refuseOthers(options.start, [...rule.parameters, ...initials, ...factors], "parameter or initial state");
-  refuseOthers(options.initial, rule.states, "state");
-  refuseOthers(options.factor, rule.states, "state");
-  refuseOthers(
+  checkKnown(options.fixed, rule.parameters, "parameter");
+  checkKnown(options.start, [...rule.parameters, ...initials, ...factors], "parameter or initial state");
+  checkKnown(options.initial, rule.states, "state");
+  checkKnown(options.factor, rule.states, "state");
+  checkKnown(
     options.bounds,
     [...rule.parameters, ...rule.states, ...initials, ...factors],
     "parameter or initial state",
   );
-  refuseReversed(options.bounds ?? {});
-  refuseTakenNames(rule, options.factor ?? {}, initials);
+  checkOrder(options.bounds ?? {});
+  checkFactorNames(rule, options.factor ?? {}, initials);
   for (const [name, value] of Object.entries(options.start ?? {})) {
     const limit = options.bounds?.[name] ?? rule.bounds[name];
-    if (limit && (value < limit[0] || value > limit[1])) throw refuseStartOutsideBounds(name, value, limit);
+    if (limit && (value < limit[0] || value > limit[1])) throw startOutsideBoundsError(name, value, limit);
   }
 }
 
-function refuseReversed(bounds: Readonly<Record<string, readonly [number, number]>>): void {
+function checkOrder(bounds: Readonly<Record<string, readonly [number, number]>>): void {
   for (const [name, limits] of Object.entries(bounds))
-    if (limits[0] > limits[1]) throw refuseReversedBounds(name, limits);
+    if (limits[0] > limits[1]) throw reversedBoundsError(name, limits);
 }
 
 /** A factor is an unknown of its own, so its name stands for nothing else. */
-function refuseTakenNames(
+function checkFactorNames(
   rule: Rule,
   factor: Readonly<Record<string, string>>,
   initials: readonly string[],
@@ -47,7 +47,7 @@ function refuseTakenNames(
   ]);
   for (const [state, name] of Object.entries(factor)) {
     const role = taken.get(name);
-    if (role !== undefined) throw refuseTakenFactor(state, name, role, freeName(`q_${state}`, taken));
+    if (role !== undefined) throw takenFactorError(state, name, role, freeName(`q_${state}`, taken));
     taken.set(name, "the factor of another state");
   }
 }
@@ -56,7 +56,7 @@ function freeName(name: string, taken: ReadonlyMap<string, string>): string {
   return taken.has(name) ? freeName(`${name}_`, taken) : name;
 }
 
-function refuseOthers(given: object | undefined, known: readonly string[], role: string): void {
+function checkKnown(given: object | undefined, known: readonly string[], role: string): void {
   for (const name of Object.keys(given ?? {}))
-    if (!known.includes(name)) throw refuseUnknownName(name, known, role);
+    if (!known.includes(name)) throw unknownNameError(name, known, role);
 }

@@ -3,7 +3,7 @@ import { type ObservedGroup, periodWords } from "../record/index.js";
 
 const named = (group: ObservedGroup): string => (group.name === "" ? "" : ` of "${group.name}"`);
 
-export function refuseMissingArgument(what: "rule" | "record"): ModelError {
+export function missingArgumentError(what: "rule" | "record"): ModelError {
   const order = "A rule comes first, then the record";
   const made =
     what === "rule" ? "Make a rule with recurrence(...) or rules" : "Make a record with observations(...)";
@@ -12,15 +12,15 @@ export function refuseMissingArgument(what: "rule" | "record"): ModelError {
   });
 }
 
-export function refuseMissingErrors(): ModelError {
+export function missingErrorsError(): ModelError {
   return new ModelError(
     "errors-not-stated",
-    'A fit states where it puts the error. Give { errors: "observation" } when the scatter lies in the reading, or ' +
-      '{ errors: "process" } when it lies in the change itself, { errors: "both" } when neither can be left out.',
+    '`errors` is required: "observation" when the scatter lies in the readings, "process" when it lies in the change ' +
+      'itself, "both" when neither can be left out. Write `errors: "observation"`.',
   );
 }
 
-export function refuseUnknownName(name: string, known: readonly string[], role: string): ModelError {
+export function unknownNameError(name: string, known: readonly string[], role: string): ModelError {
   return new ModelError(
     "unknown-name",
     `The rule has no ${role} "${name}". It has: ${known.join(", ") || "none"}.`,
@@ -38,7 +38,7 @@ export function groupError(name: string | undefined, groups: readonly string[]):
   return new ModelError("which-group", `Option \`group\`: ${said}. It has ${has}.`, { group: name, groups });
 }
 
-export function refuseReversedBounds(name: string, [lower, upper]: readonly [number, number]): ModelError {
+export function reversedBoundsError(name: string, [lower, upper]: readonly [number, number]): ModelError {
   return new ModelError(
     "bounds-reversed",
     `Option \`bounds\`: the lower bound ${lower} of "${name}" lies above the upper bound ${upper}. Write { bounds: { ${keyOf(name)}: [${upper}, ${lower}] } }.`,
@@ -47,7 +47,7 @@ export function refuseReversedBounds(name: string, [lower, upper]: readonly [num
 }
 
 /** @param role - what else the name stands for. */
-export function refuseTakenFactor(state: string, name: string, role: string, free: string): ModelError {
+export function takenFactorError(state: string, name: string, role: string, free: string): ModelError {
   return new ModelError(
     "factor-name-taken",
     `Option \`factor\`: "${name}" is already ${role}, and the factor of ${state} is an unknown of its own. Give it another name, as { factor: { ${state}: "${free}" } }.`,
@@ -57,7 +57,7 @@ export function refuseTakenFactor(state: string, name: string, role: string, fre
 
 const keyOf = (name: string): string => (/^\w+$/.test(name) ? name : `"${name}"`);
 
-export function refuseStartOutsideBounds(
+export function startOutsideBoundsError(
   name: string,
   value: number,
   bounds: readonly [number, number],
@@ -69,7 +69,7 @@ export function refuseStartOutsideBounds(
   );
 }
 
-export function refusePartOfStart(
+export function partOfStartError(
   states: readonly string[],
   open: readonly { readonly name: string }[],
 ): ModelError {
@@ -82,7 +82,7 @@ export function refusePartOfStart(
   );
 }
 
-export function refuseUnmatchedStates(states: readonly string[], recorded: readonly string[]): ModelError {
+export function unmatchedStatesError(states: readonly string[], recorded: readonly string[]): ModelError {
   return new ModelError(
     "states-not-recorded",
     `The rule moves ${states.join(", ")}, but the record holds ${recorded.join(", ")}. Name the columns with ` +
@@ -107,7 +107,7 @@ export function unitScaleError(
   );
 }
 
-export function refuseMissingInput(input: string, group: ObservedGroup): ModelError {
+export function missingInputError(input: string, group: ObservedGroup): ModelError {
   return new ModelError(
     "input-not-recorded",
     `The rule reads the input "${input}", which the record${named(group)} does not hold. Name it in observations(..., { inputs }).`,
@@ -115,7 +115,7 @@ export function refuseMissingInput(input: string, group: ObservedGroup): ModelEr
   );
 }
 
-export function refuseTooFew(
+export function tooFewError(
   group: ObservedGroup,
   usable: number,
   unknowns: readonly string[],
@@ -124,39 +124,39 @@ export function refuseTooFew(
   return new ModelError(
     "too-few-observations",
     `${usable} usable ${what}${named(group)} for ${unknowns.length} unknowns (${unknowns.join(", ")}): not fitted. ` +
-      `At least ${unknowns.length + 3} are needed; use a rule with fewer parameters, fix some with { fixed }, or wait for more rows.`,
+      `At least ${unknowns.length + 3} are needed: use a rule with fewer parameters, hold some with \`fixed\`, or collect more data.`,
     { group: group.name, usable, unknowns },
   );
 }
 
-export function refuseNoChange(group: ObservedGroup, value: number): ModelError {
+export function noChangeError(group: ObservedGroup, value: number): ModelError {
   return new ModelError(
     "no-change",
     `The value${named(group)} never changes (it is ${value} in every row): a multiplier of 1 cannot be separated from ` +
-      "no process at all. Check the column, or wait for a record that moves.",
+      "no process at all. Check the column, or collect more data.",
     { group: group.name, value },
   );
 }
 
-export function refuseNoLogarithm(group: ObservedGroup, row: number, value: number): ModelError {
+export function noLogarithmError(group: ObservedGroup, row: number, value: number): ModelError {
   return new ModelError(
     "no-logarithm",
     `Row ${row}${named(group)}: level ${value} has no logarithm, which a lognormal distribution needs. Choose ` +
-      '{ distribution: "normal" }, or leave the row out with a reason.',
+      '`distribution: "normal"`, or leave the row out with a reason.',
     { group: group.name, row, value },
   );
 }
 
-export function refuseNoStart(group: ObservedGroup, ruleText: string): ModelError {
+export function noStartError(group: ObservedGroup, ruleText: string): ModelError {
   return new ModelError(
     "no-finite-start",
     `No parameters were found at which "${ruleText}" stays finite over the record${named(group)}. Give ` +
-      "{ start: { ... } } near plausible values, or { bounds: { ... } } that keep the rule in its range.",
+      "`start` near plausible values, as `start: { r: 0.5 }`, or `bounds` that keep the rule in its range.",
     { group: group.name, rule: ruleText },
   );
 }
 
-export function refuseStepsFromZero(group: ObservedGroup, row: number, ruleText: string): ModelError {
+export function stepFromZeroError(group: ObservedGroup, row: number, ruleText: string): ModelError {
   return new ModelError(
     "step-from-zero",
     `Row ${row}${named(group)} is a count of 0 and the next one is not: with \`errors: "process"\` every step starts from the ` +
@@ -165,16 +165,16 @@ export function refuseStepsFromZero(group: ObservedGroup, row: number, ruleText:
   );
 }
 
-export function refuseNoCount(group: ObservedGroup, row: number, value: number): ModelError {
+export function notCountError(group: ObservedGroup, row: number, value: number): ModelError {
   return new ModelError(
     "not-a-count",
     `Row ${row}${named(group)}: ${value} is not a count, which a Poisson or negative binomial distribution needs. Give whole ` +
-      'numbers from 0, or choose { distribution: "normal" } or { distribution: "lognormal" }.',
+      'numbers from 0, or choose `distribution: "normal"` or `distribution: "lognormal"`.',
     { group: group.name, row, value },
   );
 }
 
-export function refuseAllCensored(group: ObservedGroup, state: string, side: "above" | "below"): ModelError {
+export function allCensoredError(group: ObservedGroup, state: string, side: "above" | "below"): ModelError {
   return new ModelError(
     "all-censored",
     `Every value of ${state}${named(group)} is only known to lie ${side} its limit: nothing tells how far. At least some exact ` +
@@ -183,7 +183,7 @@ export function refuseAllCensored(group: ObservedGroup, state: string, side: "ab
   );
 }
 
-export function refuseFilteredLimit(group: ObservedGroup, state: string, row: number): ModelError {
+export function filteredLimitError(group: ObservedGroup, state: string, row: number): ModelError {
   return new ModelError(
     "censored-in-filter",
     `Row ${row}${named(group)}: ${state} is only known up to a limit (a censored value), and \`errors: "both"\` would take the limit for a ` +
@@ -192,7 +192,7 @@ export function refuseFilteredLimit(group: ObservedGroup, state: string, row: nu
   );
 }
 
-export function refuseInputGap(input: string, group: ObservedGroup, index: number): ModelError {
+export function inputGapError(input: string, group: ObservedGroup, index: number): ModelError {
   const period = periodWords(group.axis, index);
   return new ModelError(
     "input-missing-in-period",
@@ -202,16 +202,16 @@ export function refuseInputGap(input: string, group: ObservedGroup, index: numbe
   );
 }
 
-export function refuseJumps(name: string, ruleText: string): ModelError {
+export function jumpsError(name: string, ruleText: string): ModelError {
   return new ModelError(
     "rule-jumps",
-    `"${ruleText}" jumps at ${name}(...), so its parameters have no best value that a search could find: small changes of them change ` +
+    `"${ruleText}" jumps at ${name}(...), so no search can find the best values of its parameters: small changes of them change ` +
       "nothing, and then a whole step. Fit the rule without the rounding; keep it for schedules and projections.",
     { function: name, rule: ruleText },
   );
 }
 
-export function refuseSd(sd: number | string, distribution: string): ModelError {
+export function invalidSdError(sd: number | string, distribution: string): ModelError {
   const counts = distribution === "poisson" || distribution === "negative-binomial";
   const remedy = counts
     ? `Leave it out: the variance of "${distribution}" counts follows from their mean.`
@@ -223,7 +223,7 @@ export function refuseSd(sd: number | string, distribution: string): ModelError 
   );
 }
 
-export function refuseSdColumn(column: string, inputs: readonly string[]): ModelError {
+export function sdColumnError(column: string, inputs: readonly string[]): ModelError {
   return new ModelError(
     "sd-not-recorded",
     `Option \`sd\` names the column "${column}", which the record does not hold as an input${inputs.length > 0 ? ` (it has ${inputs.join(", ")})` : ""}. ` +
@@ -232,7 +232,7 @@ export function refuseSdColumn(column: string, inputs: readonly string[]): Model
   );
 }
 
-export function refuseSdValue(column: string, group: ObservedGroup, row: number, value: number): ModelError {
+export function sdValueError(column: string, group: ObservedGroup, row: number, value: number): ModelError {
   return new ModelError(
     "invalid-sd",
     `Row ${row}${named(group)}: the standard deviation in "${column}" is ${Number.isNaN(value) ? "missing" : value}. Every row with a value needs a ` +
@@ -241,7 +241,7 @@ export function refuseSdValue(column: string, group: ObservedGroup, row: number,
   );
 }
 
-export function refuseUnknownDistribution(distribution: unknown): ModelError {
+export function unknownDistributionError(distribution: unknown): ModelError {
   return new ModelError(
     "unknown-distribution",
     `Option \`distribution\` must be "normal", "lognormal", "poisson" or "negative-binomial"; ${String(distribution)} was given. ` +
@@ -250,16 +250,16 @@ export function refuseUnknownDistribution(distribution: unknown): ModelError {
   );
 }
 
-export function refuseFactor(errors: string): ModelError {
+export function factorError(errors: string): ModelError {
   return new ModelError(
     "factor-without-trajectory",
-    `A factor of the record is found from whole trajectories, not with errors: "${errors}". Use { errors: "observation" }, or ` +
+    `Option \`factor\` needs whole trajectories, and \`errors: "${errors}"\` was given. Write \`errors: "observation"\`, or ` +
       "write the factor into the rule.",
     { errors },
   );
 }
 
-export function refuseSharedParameters(): ModelError {
+export function sharedParametersError(): ModelError {
   return new ModelError(
     "groups-together",
     "Groups that share parameters cannot be resampled one by one. Read the profile intervals of the fit, or fit them with " +
@@ -267,7 +267,7 @@ export function refuseSharedParameters(): ModelError {
   );
 }
 
-export function refuseNoDraws(): ModelError {
+export function noDrawsError(): ModelError {
   return new ModelError(
     "not-simulated",
     "No records can be simulated from this fit: it has censored values, whose limits are not known for the exact ones, or " +
@@ -275,7 +275,7 @@ export function refuseNoDraws(): ModelError {
   );
 }
 
-export function refuseNotBySquares(what: string): ModelError {
+export function notBySquaresError(what: string): ModelError {
   return new ModelError(
     "not-by-least-squares",
     `${what} works on fits by least squares of each group on its own. Counts, censored values, errors in both and groups ` +
@@ -283,7 +283,7 @@ export function refuseNotBySquares(what: string): ModelError {
   );
 }
 
-export function refuseFewDraws(draws: number): ModelError {
+export function fewDrawsError(draws: number): ModelError {
   return new ModelError(
     "too-few-draws",
     `${draws} draws cannot show the ends of an interval. Give a whole number of at least 20, better 999.`,
@@ -291,31 +291,31 @@ export function refuseFewDraws(draws: number): ModelError {
   );
 }
 
-export function refuseTogether(how: string): ModelError {
+export function togetherError(how: string): ModelError {
   return new ModelError(
     "groups-not-together",
-    `Groups are fitted { groups: "${how}" } by least squares only: not counts, not censored values, not errors in both. Fit them ` +
-      '{ groups: "separate" }, and compare the estimates.',
+    `\`groups: "${how}"\` is fitted by least squares only: not counts, not censored values, not errors in both. Write ` +
+      '`groups: "separate"`, and compare the estimates.',
     { how },
   );
 }
 
-export function refuseFewGroups(count: number): ModelError {
+export function fewGroupsError(count: number): ModelError {
   return new ModelError(
     "too-few-groups",
-    `${count} groups do not tell how parameters spread among groups. Give at least 3, better 6, or fit { groups: "combined" }.`,
+    `${count} groups do not show how parameters vary among groups. Give at least 3, better 6, or write \`groups: "combined"\`.`,
     { count },
   );
 }
 
-export function refuseNoNewRows(): ModelError {
+export function noNewRowsError(): ModelError {
   return new ModelError(
     "no-new-rows",
-    "No rows were given to extend the fit with. Give the rows that came in after those of the fit.",
+    "No later rows were given. Give `updateFit` the rows that came in after those of the fit.",
   );
 }
 
-export function refuseNoResiduals(): ModelError {
+export function noResidualsError(): ModelError {
   return new ModelError(
     "no-residuals",
     "Residuals of counts, and predictions of a fit with errors in both, cannot be put on other fitted values. Use " +
@@ -323,10 +323,10 @@ export function refuseNoResiduals(): ModelError {
   );
 }
 
-export function refuseRobust(): ModelError {
+export function robustError(): ModelError {
   return new ModelError(
     "robust-not-by-squares",
-    'Far-off values count for less only in fits by least squares of each group on its own. Drop { robust: true }, or fit with a "normal" ' +
-      'or "lognormal" spread and { groups: "separate" }.',
+    'Option `robust` goes with fits by least squares of each group on its own. Leave it out, or write `distribution: "normal"` ' +
+      'or "lognormal" with `errors: "process"` or "observation", and `groups: "separate"`.',
   );
 }
