@@ -1,4 +1,3 @@
-import { createHash } from "node:crypto";
 import {
   escapeHtml,
   look,
@@ -31,7 +30,9 @@ export interface FigureParts {
  * A figure as HTML: a picture, replaced by the live plot where scripts run and kept for print; its notes; and the
  * numbers behind it, folded away. The picture carries the title, so the page's own title is filled in by the script.
  */
-export function figureHtml({ figure, numbers, notes, picture, library }: FigureParts): string {
+export async function figureHtml({ figure, numbers, notes, picture, library }: FigureParts): Promise<string> {
+  // Loaded with the first figure, not with the package.
+  const { createHash } = await import("node:crypto");
   const title = escapeHtml(figure.title);
   const account = escapeHtml(figureAccount(figure).join(" "));
   const image = picture
