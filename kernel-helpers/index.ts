@@ -58,7 +58,7 @@ export type {
   ProposeOptions,
   SameParameters,
 } from "../src/evidence/index.js";
-export { ModelError } from "../src/numeric/index.js";
+export { type Distribution, type Distributions, distributions, ModelError } from "../src/numeric/index.js";
 export type {
   ForecastOptions,
   SimulateOptions,

@@ -8,11 +8,11 @@ import {
   tableOfRows,
 } from "../../src/record/index.js";
 import { isFrame } from "./danfo.js";
-import { notesOf } from "./frame-notes.js";
-import { observedTable } from "./observed-table.js";
-import { notARecord } from "./refusals.js";
+import { notARecordError } from "./errors.js";
+import { frameNotes } from "./frame-notes.js";
+import { observationsTable } from "./observations-table.js";
 
-/** Anything a record can be given as: a frame, rows as objects, columns by name, a table of columns, observations. */
+/** All forms of a record: a frame, row objects, columns by name, a table of columns, observations. */
 export type RecordLike =
   | DataFrame
   | ColumnTable
@@ -21,21 +21,25 @@ export type RecordLike =
   | Readonly<Record<string, ArrayLike<unknown>>>;
 
 /**
- * The columns of a record, whatever it was given as.
+ * The columns of a record in any of its forms.
  *
- * A row that lacks a key has a missing value there, and the order of keys within a row does not matter.
+ * A row without a key has a missing value there; the order of keys within a row does not matter.
  *
  * @throws {ModelError} `not-a-record` | `uneven-columns`.
  */
 export function columnsOf(record: RecordLike): ColumnTable {
   if (isFrame(record)) return columnsOfFrame(record);
   if (Array.isArray(record)) return columnsOfRows(record);
-  if (typeof record !== "object" || record === null) throw notARecord(record);
+  if (typeof record !== "object" || record === null) throw notARecordError(record);
   if (isColumnTable(record)) return record;
-  if (isObserved(record)) return observedTable(record);
+  if (isObserved(record)) return observationsTable(record);
   const entries = Object.entries(record as Record<string, unknown>);
   const bad = entries.find(([, column]) => !Array.isArray(column) && !ArrayBuffer.isView(column));
-  if (bad !== undefined || entries.length === 0) throw notARecord(record, bad?.[0]);
+  if (bad !== undefined || entries.length === 0)
+    throw notARecordError(
+      record,
+      bad === undefined ? "it has no columns" : `column "${bad[0]}" is not an array`,
+    );
   return tableOf(record as Record<string, ArrayLike<unknown>>);
 }
 
@@ -45,15 +49,15 @@ function isObserved(record: object): record is Observations {
 }
 
 function columnsOfFrame(frame: DataFrame): ColumnTable {
-  // The getter builds nothing, but is asked once: `column()` copies every row each time.
+  // Read once: `column()` would copy every row each time.
   const rows = frame.values as readonly (readonly unknown[])[];
-  const { names = frame.columns, decisions, raw = names.length } = notesOf(frame);
+  const { names = frame.columns, decisions, raw = names.length } = frameNotes(frame);
   const columns = names.slice(0, raw).map((_, at) => packed(rows.map((row) => row[at])));
   return { names: names.slice(0, raw), columns, ...(decisions && { decisions }) };
 }
 
 function columnsOfRows(rows: readonly unknown[]): ColumnTable {
   const bad = rows.findIndex((row) => typeof row !== "object" || row === null || Array.isArray(row));
-  if (bad >= 0) throw notARecord(rows, `row ${bad + 1}`);
+  if (bad >= 0) throw notARecordError(rows, `row ${bad + 1} is not an object`);
   return tableOfRows(rows as readonly object[]);
 }

@@ -5,7 +5,7 @@ type Danfo = typeof import("danfojs-node");
 
 const load = createRequire(__filename);
 
-/** danfojs-node, loaded when it is first used: a fifth of a second that most imports need not spend. */
+/** danfojs-node, loaded on first use: it takes a fifth of a second. */
 export function danfo(): Danfo {
   return load("danfojs-node") as Danfo;
 }

@@ -3,33 +3,33 @@ import type { Decision } from "../../src/record/index.js";
 import type { RecordSource } from "../../src/store/index.js";
 import { checkCall } from "../options/index.js";
 
-/** What is known of a frame besides its cells; kept beside it, so that no column or option is spent on it. */
+/** Metadata of a frame, stored beside it. */
 export interface FrameNotes {
-  /** Where the record was read from. */
+  /** Source of the record. */
   readonly source?: RecordSource;
   readonly decisions?: readonly Decision[];
-  /** Columns of the record, where columns of corrected values stand behind them. */
+  /** Number of columns of the record, when columns of corrected values follow them. */
   readonly raw?: number;
-  /** Names of the record, where the frame could not carry them. */
+  /** Column names of the record, when the frame could not take them. */
   readonly names?: readonly string[];
 }
 
 const notes = new WeakMap<object, FrameNotes>();
 
-export function noteFrame(frame: DataFrame, known: FrameNotes): void {
+export function attachNotes(frame: DataFrame, known: FrameNotes): void {
   notes.set(frame, known);
 }
 
-export function notesOf(frame: object): FrameNotes {
+export function frameNotes(frame: object): FrameNotes {
   return notes.get(frame) ?? {};
 }
 
 /**
- * The file that a frame was read from: path as written, checksum, bytes, rows, and what was found out about it.
+ * The file that a frame was read from: path, checksum, bytes, rows, and notes about how it was read.
  *
- * @returns undefined for a frame that was not read from a file, or was made from one that was.
+ * @returns undefined for a frame that was not read from a file, or was derived from another frame.
  */
 export function sourceOf(frame: DataFrame): RecordSource | undefined {
   checkCall("sourceOf", arguments);
-  return notesOf(frame).source;
+  return frameNotes(frame).source;
 }

@@ -9,24 +9,24 @@ import { isFrame } from "./danfo.js";
 import { resultTables } from "./result-tables.js";
 import { toFrame } from "./to-frame.js";
 
-/** Any result of this package: a plain object with a kind. */
+/** A result of this package: a plain object with a kind. */
 export interface Result {
   readonly kind: string;
 }
 
 /** The tables of a fit. */
 export interface FitFrames {
-  /** A row a parameter. */
+  /** One row per parameter. */
   readonly estimates: DataFrame;
-  /** A row a period. */
+  /** One row per period. */
   readonly points: DataFrame;
-  /** A row a series. */
+  /** One row per series. */
   readonly summary: DataFrame;
 }
 
 /**
- * Turns anything into DataFrames: a record or observations or differences into one, a fit into its three views,
- * any other result into one a list that it holds, by name.
+ * Converts to DataFrames: a record, observations or differences to one, a fit to its three tables, any other result to
+ * one per list in it, by name.
  *
  * @example frame(fit(rule, counts, { errors: "process" })).estimates
  */
@@ -44,7 +44,7 @@ export function frame(
   return Object.freeze(Object.fromEntries(tables.map(({ name, table }) => [name, toFrame(table)])));
 }
 
-/** The tables of a record or result; a single one named "record" where there is but one. */
+/** The tables of a record or result; a single table is named "record". */
 export function tablesOf(value: RecordLike | Result): readonly NamedTable[] {
   switch ((value as Partial<Result>).kind) {
     case "differences":

@@ -3,38 +3,38 @@ import type { NamedTable } from "../../src/store/index.js";
 
 type Plain = Readonly<Record<string, unknown>>;
 
-/** Columns that a part of a result takes over from what it is part of. */
+/** Columns that a part of a result inherits. */
 interface Inherited {
   readonly scalars: Plain;
   readonly series: Readonly<Record<string, ArrayLike<unknown>>>;
 }
 
-/** Parts of a result that are results themselves and have tables of their own. */
-const apart = new Set(["observations", "rule", "fit", "forecast", "period-axis"]);
+/** Parts that are results themselves, with tables of their own. */
+const separateKinds = new Set(["observations", "rule", "fit", "forecast", "period-axis"]);
 
 /**
- * The tables of any result: its single values as "summary", and every list in it as a table of the list's name,
- * a row an item (or a row a place, where an item holds series), with the values of what it is part of beside it.
+ * The tables of any result: its single values as "summary", and every list as a table of the same name, with one row per
+ * item (or per element of its series) and the inherited values beside it.
  */
 export function resultTables(result: object): readonly NamedTable[] {
   const rows = new Map<string, object[]>();
-  gather(result as Plain, "summary", { scalars: {}, series: {} }, rows);
+  collect(result as Plain, "summary", { scalars: {}, series: {} }, rows);
   return Array.from(rows, ([name, own]) => ({ name, table: tableOfRows(own) }));
 }
 
-function gather(part: Plain, name: string, inherited: Inherited, rows: Map<string, object[]>): void {
+function collect(part: Plain, name: string, inherited: Inherited, rows: Map<string, object[]>): void {
   const scalars = { ...inherited.scalars, ...scalarsOf(part, "") };
   const own = seriesOf(part);
   const length = Math.max(0, ...Object.values(own).map((series) => series.length));
   const series = ofLength({ ...inherited.series, ...own }, length);
-  const saysMore = Object.keys(scalars).length > Object.keys(inherited.scalars).length;
+  const hasNewScalars = Object.keys(scalars).length > Object.keys(inherited.scalars).length;
   if (length > 0)
     add(
       rows,
       name,
       Array.from({ length }, (_, i) => ({ ...scalars, ...at(series, i) })),
     );
-  else if (saysMore) add(rows, name, [scalars]);
+  else if (hasNewScalars) add(rows, name, [scalars]);
   for (const [child, items] of Object.entries(part)) {
     if (isListOfTexts(items))
       add(
@@ -42,7 +42,7 @@ function gather(part: Plain, name: string, inherited: Inherited, rows: Map<strin
         child,
         items.map((text) => ({ ...scalars, [child]: text })),
       );
-    else if (isListOfParts(items)) for (const item of items) gather(item, child, { scalars, series }, rows);
+    else if (isListOfParts(items)) for (const item of items) collect(item, child, { scalars, series }, rows);
   }
 }
 
@@ -57,7 +57,7 @@ function isScalar(value: unknown): boolean {
 function isPart(value: unknown): value is Plain {
   if (typeof value !== "object" || value === null || Array.isArray(value) || ArrayBuffer.isView(value))
     return false;
-  return !apart.has(String((value as Plain)["kind"]));
+  return !separateKinds.has(String((value as Plain)["kind"]));
 }
 
 function isListOfParts(value: unknown): value is readonly Plain[] {
@@ -68,7 +68,7 @@ function isListOfTexts(value: unknown): value is readonly string[] {
   return Array.isArray(value) && value.length > 0 && value.every((item) => typeof item === "string");
 }
 
-/** Single values, those of a nested part under "part.name". */
+/** Single values; those of a nested part are named "part.name". */
 function scalarsOf(part: Plain, prefix: string): Plain {
   const own: Record<string, unknown> = {};
   for (const [name, value] of Object.entries(part)) {

@@ -1,7 +1,8 @@
 import type { DataFrame } from "danfojs-node";
 import { type Bundle, bundleOf, type Column, table } from "../tables/index.js";
+import { plural } from "../wording/index.js";
 import { danfo } from "./danfo.js";
-import { notesOf } from "./frame-notes.js";
+import { frameNotes } from "./frame-notes.js";
 
 const shows: unique symbol = Symbol.for("mime-bundle") as never;
 
@@ -11,7 +12,7 @@ interface SeriesLike {
   readonly index: readonly (string | number)[];
 }
 
-/** Lets every frame and series of danfo show itself as a table, those of a cell's own making too. */
+/** Lets every danfo frame and series display itself as a table. */
 export function showFrames(): void {
   const { DataFrame, Series } = danfo();
   if (Object.hasOwn(DataFrame.prototype, shows)) return;
@@ -27,21 +28,22 @@ export function showFrames(): void {
   });
 }
 
-/** Rows of a long frame that are shown; the note says how many there are. */
+/** Maximum number of rows shown; a note gives the number of all rows. */
 const shownRows = 40;
 
 async function frameBundle(frame: DataFrame): Promise<Bundle> {
-  const { source, names } = notesOf(frame);
+  const { source, names } = frameNotes(frame);
   const labels = names ?? frame.columns;
   const rows = frame.values as unknown[][];
-  const notes = [`${rows.length} rows, ${labels.length} columns${cut(rows.length)}.`];
-  if (source !== undefined) notes.push(...source.found, `SHA-256 ${source.checksum}, ${source.bytes} bytes.`);
+  const notes = [`${plural(rows.length, "row")}, ${plural(labels.length, "column")}${cut(rows.length)}.`];
+  if (source !== undefined)
+    notes.push(...source.found, `SHA-256 ${source.checksum}, ${plural(source.bytes, "byte")}.`);
   return bundleOfRows(source?.path ?? "DataFrame", labels, rows, frame.index, notes);
 }
 
 async function seriesBundle(series: SeriesLike): Promise<Bundle> {
   const rows = series.values.map((value) => [value]);
-  const notes = [`${rows.length} rows${cut(rows.length)}.`];
+  const notes = [`${plural(rows.length, "row")}${cut(rows.length)}.`];
   return bundleOfRows("Series", [String(series.columns[0])], rows, series.index, notes);
 }
 
@@ -49,7 +51,7 @@ function cut(rows: number): string {
   return rows > shownRows ? `; the first ${shownRows} are shown` : "";
 }
 
-/** Every digit is shown and none grouped: a record is shown as it is. The index comes first where it says more than the place. */
+/** All digits, without grouping: a record is shown as it is. The index is shown unless it only counts rows. */
 async function bundleOfRows(
   title: string,
   names: readonly string[],

@@ -1,20 +1,20 @@
 import type { DataFrame } from "danfojs-node";
 import { type Column, type ColumnTable, rowCount } from "../../src/record/index.js";
+import { withCorrectionColumns } from "./corrections-table.js";
 import { danfo } from "./danfo.js";
-import { noteFrame } from "./frame-notes.js";
+import { attachNotes } from "./frame-notes.js";
 import { showFrames } from "./show-frames.js";
-import { shownTable } from "./shown-table.js";
 
 /**
- * A danfo DataFrame of a table. A missing number is NaN in the frame, because danfo's arithmetic counts null as
- * zero; any other missing cell is null.
+ * A danfo DataFrame of a table. A missing number is NaN in the frame, because danfo's arithmetic treats null as zero; any
+ * other missing cell is null.
  *
- * danfo makes a property of every column name, so a name that one of its own members has (`index`, `values`,
- * `shape`), an empty one and a second equal one cannot be carried: such a column is called "values (column)",
- * and the commands of this package still know it by the record's name.
+ * danfo makes a property of every column name, so it cannot have the name of one of its members (`index`, `values`,
+ * `shape`), an empty name or a repeated one: such a column is called "values (column)", and the functions of this
+ * package still find it by its original name.
  */
 export function toFrame(record: ColumnTable): DataFrame {
-  const table = shownTable(record);
+  const table = withCorrectionColumns(record);
   const names = frameNames(table.names);
   const dtypes = table.columns.map(kindOf);
   const rows = Array.from({ length: rowCount(table) }, (_, row) =>
@@ -23,14 +23,14 @@ export function toFrame(record: ColumnTable): DataFrame {
   const frame = new (danfo().DataFrame)(rows, { columns: [...names], dtypes });
   showFrames();
   const renamed = names.some((name, i) => name !== table.names[i]);
-  noteFrame(frame, {
+  attachNotes(frame, {
     ...(renamed && { names: table.names }),
     ...(record.decisions && { decisions: record.decisions, raw: record.names.length }),
   });
   return frame;
 }
 
-/** danfo guesses a column's kind from its first rows; here every cell is asked. */
+/** danfo infers the kind of a column from its first rows; here every cell is checked. */
 function kindOf(column: Column): string {
   if (column instanceof Float64Array) return "float32";
   const cells = column.filter((cell) => cell !== null && cell !== undefined);

@@ -2,60 +2,74 @@ import { equilibriumLayers } from "./equilibrium-layers.js";
 import { type Axis, type Figure, figure } from "./figure.js";
 import type { Layer } from "./layer.js";
 import { significant } from "./number-text.js";
-import { type DrawnLine, recordedStyle, ruleStyle } from "./recorded-series.js";
+import { type LineSeries, recordedStyle, ruleStyle } from "./recorded-series.js";
 
-/** Pairs of a value and what became of it one step later. */
+/** Pairs of a value and its change over the next step. */
 export interface ChangePairs {
   readonly name: string;
   readonly value: ArrayLike<number>;
   readonly change: ArrayLike<number>;
-  /** Pairs more than a step apart, given per step: drawn hollow. Default false. */
-  readonly overGap?: boolean;
+  /** Pairs more than one step apart, with the change per step: drawn hollow. Default false. */
+  readonly multiStep?: boolean;
 }
 
-/** A value at which a rule stands still. */
-export interface DrawnEquilibrium {
+/** An equilibrium of a rule. */
+export interface EquilibriumPoint {
   readonly value: number;
   readonly stable: boolean | "undetermined";
 }
 
-/** What `changeFigure` draws. */
+/** Options of `changeFigure`. */
 export interface ChangeFigureOptions {
   readonly title: string;
   readonly value: Axis;
-  /** Change, ratio, or change per head, with its unit. */
+  /** Change, ratio, or per-capita change, with its unit. */
   readonly change: Axis;
   readonly pairs: readonly ChangePairs[];
-  readonly rules?: readonly DrawnLine[];
-  readonly equilibria?: readonly DrawnEquilibrium[];
-  /** Change that means standing still: 0, or 1 for a ratio. Default 0. */
-  readonly still?: number;
+  readonly rules?: readonly LineSeries[];
+  readonly equilibria?: readonly EquilibriumPoint[];
+  /** The value that means no change: 0, or 1 for a ratio. Default 0. */
+  readonly noChange?: number;
   readonly notes?: readonly string[];
 }
 
 /**
- * Change against value: the picture in which a rule of change is seen. Equilibria stand on the line of no change,
- * filled when stable, open when not.
+ * Change against value, which shows the shape of a rule. Equilibria lie on the line of no change: filled when stable,
+ * open when unstable.
  */
 export function changeFigure(options: ChangeFigureOptions): Figure {
-  const { title, value, change, pairs, rules = [], equilibria = [], still = 0, notes = [] } = options;
+  const { title, value, change, pairs, rules = [], equilibria = [], noChange = 0, notes = [] } = options;
   const layers: Layer[] = [
-    { mark: "line", name: "no change", x: reach(options), y: [still, still], style: 4, dashed: true },
+    {
+      mark: "line",
+      name: "no change",
+      x: valueRange(options),
+      y: [noChange, noChange],
+      style: 4,
+      dashed: true,
+    },
     ...rules.map((rule, turn): Layer => ({ mark: "line", ...rule, style: ruleStyle(turn) })),
     ...pairs.map((pair): Layer => {
-      const look = pair.overGap ? "open" : "plain";
-      return { mark: "points", name: pair.name, x: pair.value, y: pair.change, look, style: recordedStyle };
+      const variant = pair.multiStep ? "open" : "plain";
+      return {
+        mark: "points",
+        name: pair.name,
+        x: pair.value,
+        y: pair.change,
+        variant: variant,
+        style: recordedStyle,
+      };
     }),
     ...equilibriumLayers(
       equilibria,
-      equilibria.map(() => still),
+      equilibria.map(() => noChange),
     ),
   ];
-  return figure({ title, x: value, y: change, layers, notes, summary: standsStill(equilibria) });
+  return figure({ title, x: value, y: change, layers, notes, summary: equilibriumSummary(equilibria) });
 }
 
-/** From the least to the greatest value drawn. */
-function reach({ pairs, rules = [], equilibria = [] }: ChangeFigureOptions): [number, number] {
+/** Smallest and largest value drawn. */
+function valueRange({ pairs, rules = [], equilibria = [] }: ChangeFigureOptions): [number, number] {
   const drawn = [...pairs.map((pair) => pair.value), ...rules.map((rule) => rule.x as ArrayLike<number>)];
   const values = [...drawn.flatMap((each) => Array.from(each)), ...equilibria.map((each) => each.value)];
   const finite = values.filter(Number.isFinite);
@@ -65,9 +79,9 @@ function reach({ pairs, rules = [], equilibria = [] }: ChangeFigureOptions): [nu
   );
 }
 
-function standsStill(equilibria: readonly DrawnEquilibrium[]): string {
+function equilibriumSummary(equilibria: readonly EquilibriumPoint[]): string {
   if (equilibria.length === 0) return "";
   const kind = { true: "stable", false: "unstable", undetermined: "stability undetermined" };
   const each = equilibria.map(({ value, stable }) => `${significant(value)} (${kind[`${stable}`]})`);
-  return `The rule stands still at ${each.join(", ")}.`;
+  return `${each.length === 1 ? "Equilibrium" : "Equilibria"}: ${each.join(", ")}.`;
 }

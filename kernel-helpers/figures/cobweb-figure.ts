@@ -1,11 +1,13 @@
-import type { DrawnEquilibrium } from "./change-figure.js";
+import { plural } from "../wording/index.js";
+import type { EquilibriumPoint } from "./change-figure.js";
 import { equilibriumLayers } from "./equilibrium-layers.js";
 import { type Axis, type Figure, figure } from "./figure.js";
+import { significant } from "./number-text.js";
 
-/** What `cobwebFigure` draws. */
+/** Options of `cobwebFigure`. */
 export interface CobwebFigureOptions {
   readonly title: string;
-  /** The state and its unit; both axes measure it. */
+  /** The state and its unit, on both axes. */
   readonly state: Axis;
   /** The rule: next value against present value. */
   readonly rule: {
@@ -13,33 +15,40 @@ export interface CobwebFigureOptions {
     readonly present: ArrayLike<number>;
     readonly next: ArrayLike<number>;
   };
-  /** A path of the rule, period by period. */
-  readonly path: ArrayLike<number>;
-  readonly equilibria?: readonly DrawnEquilibrium[];
+  /** A trajectory of the rule, period by period. */
+  readonly trajectory: ArrayLike<number>;
+  readonly equilibria?: readonly EquilibriumPoint[];
   readonly notes?: readonly string[];
 }
 
 /**
- * A path of a rule as steps between its curve and the diagonal: up or down to the curve is one period, across to the
- * diagonal makes the next value the present one. Rests and cycles are seen at once.
+ * Cobweb plot: a trajectory as steps between the curve of the rule and the diagonal. Equilibria and cycles are visible
+ * at once.
  */
 export function cobwebFigure(options: CobwebFigureOptions): Figure {
-  const { title, state, rule, path, equilibria = [], notes = [] } = options;
-  const still = equilibria.map(({ value }) => value);
+  const { title, state, rule, trajectory, equilibria = [], notes = [] } = options;
+  const heights = equilibria.map(({ value }) => value);
   const first = rule.present[0] ?? 0;
   const last = rule.present[rule.present.length - 1] ?? 1;
+  const periods = trajectory.length - 1;
+  const at = (period: number): string => significant(trajectory[period] ?? Number.NaN);
   return figure({
     title,
-    x: { ...state, title: `${state.title}, present` },
-    y: { ...state, title: `${state.title}, next` },
+    x: { ...state, title: `${state.title} at t` },
+    y: { ...state, title: `${state.title} at t + 1` },
     layers: [
-      { mark: "line", name: "next = present", x: [first, last], y: [first, last], style: 4, dashed: true },
+      { mark: "line", name: "no change", x: [first, last], y: [first, last], style: 4, dashed: true },
       { mark: "line", name: rule.name, x: rule.present, y: rule.next, style: 0 },
-      { mark: "line", name: `path over ${path.length - 1} periods`, ...steps(path), style: 1 },
-      ...equilibriumLayers(equilibria, still),
+      {
+        mark: "line",
+        name: `trajectory over ${plural(periods, "period")}`,
+        ...steps(trajectory),
+        style: 1,
+      },
+      ...equilibriumLayers(equilibria, heights),
     ],
     notes,
-    summary: `The path begins at ${path[0]} and after ${path.length - 1} periods is at ${path[path.length - 1]}.`,
+    summary: `The trajectory starts at ${at(0)} and is at ${at(periods)} after ${plural(periods, "period")}.`,
   });
 }
 

@@ -1,48 +1,48 @@
 import { percent } from "../wording/index.js";
 import { type Axis, type Figure, figure, type Panel } from "./figure.js";
 import type { Layer } from "./layer.js";
-import { type DrawnLine, type RecordedSeries, recordedStyle } from "./recorded-series.js";
+import { type LineSeries, type RecordedSeries, recordedStyle } from "./recorded-series.js";
 import { sharedScale } from "./shared-scale.js";
 
-/** A band of a projection. */
-export interface DrawnBand {
-  /** Share of futures inside it: 0.8. */
+/** A band of a forecast. */
+export interface ForecastBand {
+  /** Coverage of the band: 0.8. */
   readonly level: number;
-  /** Which of the three kinds it is: "future observation", "mean path", "parameter". */
+  /** What the band covers: "future observation", "mean path", "parameter". */
   readonly of: string;
   readonly x: ArrayLike<number>;
   readonly lower: ArrayLike<number>;
   readonly upper: ArrayLike<number>;
 }
 
-/** A projection of one series. */
+/** The forecast of one series. */
 export interface ProjectedSeries {
-  /** "" when there is a single series. */
+  /** "" for a single series. */
   readonly name: string;
-  /** Its own horizontal axis, where that of the figure does not hold. */
+  /** Horizontal axis of this series, if it differs from the figure's. */
   readonly x?: Axis;
   readonly recorded: RecordedSeries;
-  readonly central: DrawnLine;
-  readonly bands: readonly DrawnBand[];
+  readonly central: LineSeries;
+  readonly bands: readonly ForecastBand[];
   readonly recordEnd: number;
-  /** Where single paths cease to mean anything; undefined when that is not reached. */
-  readonly horizon?: number;
+  /** Prediction horizon, beyond which single trajectories cannot be predicted; undefined when it is not reached. */
+  readonly predictionHorizon?: number;
 }
 
-/** What `fanFigure` draws. */
+/** Options of `fanFigure`. */
 export interface FanFigureOptions {
   readonly title: string;
   readonly x: Axis;
   readonly y: Axis;
   readonly series: readonly ProjectedSeries[];
-  /** The level that decides, with its meaning: "draw-down at 120". */
+  /** The decisive level with its meaning: "draw-down at 120". */
   readonly threshold?: { readonly value: number; readonly name: string };
-  /** Sentence on the probability of the event the client cares about. */
+  /** Sentence about the probability of the event in question. */
   readonly event?: string;
   readonly notes?: readonly string[];
 }
 
-/** Record and projection on one axis: nested bands named by level and kind, the record's end, and what decides. */
+/** Fan chart: record and forecast on one axis, with nested bands, the end of the record and the decisive level. */
 export function fanFigure({ title, x, y, series, threshold, event, notes = [] }: FanFigureOptions): Figure {
   const panels = series.map(
     (each): Panel => ({
@@ -65,7 +65,7 @@ export function fanFigure({ title, x, y, series, threshold, event, notes = [] }:
   });
 }
 
-function fanLayers({ recorded, central, bands, recordEnd, horizon }: ProjectedSeries): Layer[] {
+function fanLayers({ recorded, central, bands, recordEnd, predictionHorizon }: ProjectedSeries): Layer[] {
   const nested = [...bands].sort((a, b) => b.level - a.level);
   return [
     ...nested.map(({ level, of, x, lower, upper }, turn): Layer => {
@@ -73,7 +73,9 @@ function fanLayers({ recorded, central, bands, recordEnd, horizon }: ProjectedSe
     }),
     { mark: "line", ...central, style: 0 },
     { mark: "points", ...recorded, style: recordedStyle },
-    { mark: "vertical", name: "record ends", x: recordEnd, style: 4 },
-    ...(horizon === undefined ? [] : [{ mark: "vertical", name: "horizon", x: horizon, style: 5 } as const]),
+    { mark: "vertical", name: "end of record", x: recordEnd, style: 4 },
+    ...(predictionHorizon === undefined
+      ? []
+      : [{ mark: "vertical", name: "prediction horizon", x: predictionHorizon, style: 5 } as const]),
   ];
 }

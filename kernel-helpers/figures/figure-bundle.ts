@@ -1,18 +1,18 @@
 import { type Bundle, tableText } from "../tables/index.js";
-import { drawPicture } from "./draw-picture.js";
+import { downsamplingNotes } from "./downsampling-notes.js";
 import type { Figure } from "./figure.js";
+import { figureData } from "./figure-data.js";
 import { figureHtml, widths } from "./figure-html.js";
-import { libraryOnce } from "./figure-library.js";
 import { figureText } from "./figure-text.js";
-import { numbersBehind } from "./numbers-behind.js";
+import { drawPicture } from "./picture-worker-client.js";
+import { plotLibraryOnce } from "./plot-library.js";
 import { plotSpec } from "./plot-spec.js";
-import { thinningNotes } from "./thinning-notes.js";
 
-/** A figure for every front end: a live plot, a picture, and the numbers as text. */
+/** The representations of a figure: interactive plot, picture, and data as text. */
 export async function figureBundle(figure: Figure): Promise<Bundle> {
-  const numbers = figure.numbers ?? numbersBehind(figure);
-  const notes = [...figure.notes, ...thinningNotes(figure)];
-  const library = libraryOnce();
+  const numbers = figure.numbers ?? figureData(figure);
+  const notes = [...figure.notes, ...downsamplingNotes(figure)];
+  const library = plotLibraryOnce();
   const png = await drawPicture(plotSpec(figure, widths.wide, true));
   const picture = png && Buffer.from(png).toString("base64");
   return {

@@ -1,21 +1,21 @@
 import {
   escapeHtml,
-  look,
   oneLine,
   superscript,
   type Table,
   tableHtml,
+  theme,
   typeface,
   untypeset,
 } from "../tables/index.js";
 import type { Figure } from "./figure.js";
-import { figureAccount } from "./figure-account.js";
+import { describeFigure } from "./figure-description.js";
 import { plotSpec } from "./plot-spec.js";
 
-/** Width for which a plot is laid out on a wide and on a narrow screen, in pixels. */
+/** Layout widths for wide and narrow screens, in pixels. */
 export const widths: { readonly wide: number; readonly narrow: number } = { wide: 760, narrow: 240 };
 
-/** What a figure's HTML is put together from. */
+/** The parts of a figure's HTML. */
 export interface FigureParts {
   readonly figure: Figure;
   readonly numbers: readonly Table[];
@@ -27,33 +27,33 @@ export interface FigureParts {
 }
 
 /**
- * A figure as HTML: a picture, replaced by the live plot where scripts run and kept for print; its notes; and the
- * numbers behind it, folded away. The picture carries the title, so the page's own title is filled in by the script.
+ * A figure as HTML: a picture, replaced by the interactive plot where scripts run and kept for print; its notes; and its
+ * data, folded. The picture contains the title, so the script fills in the title of the page.
  */
 export async function figureHtml({ figure, numbers, notes, picture, library }: FigureParts): Promise<string> {
   // Loaded with the first figure, not with the package.
   const { createHash } = await import("node:crypto");
   const title = escapeHtml(figure.title);
-  const account = escapeHtml(figureAccount(figure).join(" "));
+  const description = escapeHtml(describeFigure(figure).join(" "));
   const image = picture
-    ? `<img class="pw-picture" src="data:image/png;base64,${picture}" alt="${title}. ${account}" style="max-width:100%;height:auto">`
+    ? `<img class="pw-picture" src="data:image/png;base64,${picture}" alt="${title}. ${description}" style="max-width:100%;height:auto">`
     : "";
   const shownNotes = notes.map((note) => `<p dir="auto">${escapeHtml(superscript(note))}</p>`).join("");
   const plot = plotJson(figure);
-  // By what it draws: the same figure shown twice is drawn twice, each time in the next box that waits for it.
+  // Named by its content: the same figure shown twice is drawn twice, each time in the next empty box.
   const name = createHash("sha256").update(plot).digest("hex").slice(0, 16);
   return [
     `<div class="pw-figure pw-${name}${picture ? " pw-pictured" : ""} ${untypeset}">${figureStyle}`,
     `<div class="pw-title" dir="auto">${picture ? "" : title}</div>`,
-    `<div class="pw-live" role="img" aria-label="${title}. ${account}"></div>${image}`,
+    `<div class="pw-live" role="img" aria-label="${title}. ${description}"></div>${image}`,
     shownNotes === "" ? "" : `<div class="pw-notes">${shownNotes}</div>`,
-    `<details><summary>Numbers behind this figure</summary><p dir="auto">${account}</p>`,
+    `<details><summary>Data of this figure</summary><p dir="auto">${description}</p>`,
     `${numbers.map(tableHtml).join("")}</details></div>`,
     `<script>(function(){var s=${plot},name="pw-${name}";${drawing}})()</script>${library}`,
   ].join("");
 }
 
-/** What the script draws: traces, a layout for each width, and the title, safe inside a script element. */
+/** Data for the script: traces, a layout for each width, and the title, escaped for a script element. */
 function plotJson(figure: Figure): string {
   const wide = plotSpec(figure, widths.wide, false);
   const narrow = plotSpec(figure, widths.narrow, false);
@@ -68,7 +68,7 @@ function plotJson(figure: Figure): string {
     .replace(/\u2029/g, "\\u2029");
 }
 
-// Where the script stands is not known: a notebook's page runs it from elsewhere.
+// The position of the script is unknown: a notebook page may run it from elsewhere.
 const drawing = `
 var box=document.querySelector("."+name+":not(.pw-drawn)");
 if(!box)return;
@@ -89,14 +89,14 @@ else(window.periodwiseFigures=window.periodwiseFigures||[]).push(draw)`.replace(
 
 const box = ".pw-figure.pw-figure";
 const figureStyle: string = `<style>
-${box}{margin:.8em 0 1.2em;max-width:1000px;color:${look.ink};background:${look.paper};font-family:${typeface};font-size:14px;line-height:1.4;border-top:3px solid ${look.accent};padding-top:.5em}
+${box}{margin:.8em 0 1.2em;max-width:1000px;color:${theme.text};background:${theme.background};font-family:${typeface};font-size:14px;line-height:1.4;border-top:3px solid ${theme.accent};padding-top:.5em}
 ${box} .pw-title{display:none;font-weight:600;font-size:15px;overflow-wrap:anywhere}
 ${box} .pw-live{display:none;width:100%;overflow:hidden}
 ${box} .pw-picture{display:block;max-width:min(100%,${widths.wide}px);height:auto;margin:0}
 ${box}.pw-shown .pw-title,${box}.pw-shown .pw-live{display:block}
 ${box}.pw-shown .pw-picture{display:none}
-${box} .pw-notes{color:${look.quiet};font-size:13px}
+${box} .pw-notes{color:${theme.mutedText};font-size:13px}
 ${box} .pw-notes p,${box} details p{margin:.2em 0;overflow-wrap:anywhere}
-${box} summary{cursor:pointer;color:${look.accent};font-size:13px;padding:.2em 0;display:list-item}
+${box} summary{cursor:pointer;color:${theme.accent};font-size:13px;padding:.2em 0;display:list-item}
 @media print{${box}{break-inside:avoid}${box}.pw-shown .pw-picture{display:block}${box}.pw-pictured .pw-live,${box}.pw-pictured .pw-title{display:none}${box} details:not([open]){display:none}}
 </style>`;

@@ -1,9 +1,9 @@
 import { oneLine } from "../tables/index.js";
 import type { Figure } from "./figure.js";
-import { figureAccount } from "./figure-account.js";
+import { describeFigure } from "./figure-description.js";
 
-/** A figure where nothing can be drawn: its title, what it shows in words, its notes, and its numbers. */
+/** A figure as plain text: title, description, notes and data. */
 export function figureText(figure: Figure, numbers: readonly string[], notes: readonly string[]): string {
-  const words = [figure.title, ...figureAccount(figure), ...notes].map(oneLine);
+  const words = [figure.title, ...describeFigure(figure), ...notes].map(oneLine);
   return [words.join("\n"), ...numbers].join("\n\n");
 }

@@ -2,11 +2,11 @@ import { frozenCopy } from "../../src/numeric/index.js";
 import type { PeriodAxis } from "../../src/record/index.js";
 import { checkCall } from "../options/index.js";
 import { type Bundle, showing, type Table } from "../tables/index.js";
+import { emptyFigureError } from "./errors.js";
 import { figureBundle } from "./figure-bundle.js";
 import type { Layer } from "./layer.js";
-import { emptyFigure } from "./refusals.js";
 
-/** An axis: what it measures and in what unit. */
+/** An axis: title, unit and scale. */
 export interface Axis {
   /** What the axis measures. */
   readonly title: string;
@@ -32,7 +32,7 @@ export interface Axis {
   readonly bare?: boolean;
 }
 
-/** One set of axes with what is drawn on it, in drawing order. */
+/** One set of axes with its layers, in drawing order. */
 export interface Panel {
   /** Title of the panel; "" for the only one of a figure. */
   readonly title: string;
@@ -44,19 +44,19 @@ export interface Panel {
   readonly layers: readonly Layer[];
 }
 
-/** A figure as data: what it says, not how it looks. */
+/** A figure as data: its content, not its style. */
 export interface Figure {
   readonly kind: "figure";
   readonly title: string;
   readonly panels: readonly Panel[];
-  /** One or two sentences that say in words what the figure shows; "" when the layers' own account must do. */
+  /** One or two sentences on what the figure shows; "" to rely on the description of its layers. */
   readonly summary: string;
   readonly notes: readonly string[];
-  /** Tables shown as the numbers behind the figure; undefined when what is drawn are those numbers. */
+  /** Tables with the data of the figure; undefined to list what is drawn. */
   readonly numbers: readonly Table[] | undefined;
 }
 
-/** What `figure` takes: one panel's axes and layers, or several panels. */
+/** Options of `figure`: axes and layers of one panel, or several panels. */
 export interface FigureOptions {
   /** Title of the figure. */
   readonly title: string;
@@ -77,8 +77,7 @@ export interface FigureOptions {
 }
 
 /**
- * Makes a figure that shows itself: a live plot where scripts run, a picture where they do not, and always a
- * text with the numbers behind it.
+ * Makes a figure: an interactive plot where scripts run, a picture where they do not, and always a text with its data.
  *
  * @throws {ModelError} `empty-figure` when there are no axes, or no layer in a panel.
  * @example figure({ title: "Level", x: { title: "Week" }, y: { title: "Stock", unit: "coils" },
@@ -89,7 +88,7 @@ export function figure(options: FigureOptions): Figure {
   // Copies: the caller's lists must not be frozen, nor change the figure later.
   const { title, x, y, layers, panels: given, summary = "", notes = [], numbers } = frozenCopy(options);
   const panels = given ?? (x && y && layers ? [{ title: "", x, y, layers }] : []);
-  if (panels.length === 0 || panels.some((panel) => panel.layers.length === 0)) throw emptyFigure(title);
+  if (panels.length === 0 || panels.some((panel) => panel.layers.length === 0)) throw emptyFigureError(title);
   const made: Figure = { kind: "figure", title, panels, summary, notes, numbers };
   return showing(made, (): Promise<Bundle> => figureBundle(made));
 }

@@ -1,21 +1,21 @@
 import { type Axis, type Figure, figure, type Panel } from "./figure.js";
 import type { Layer } from "./layer.js";
-import { type DrawnLine, type RecordedSeries, recordedStyle, ruleStyle } from "./recorded-series.js";
+import { type LineSeries, type RecordedSeries, recordedStyle, ruleStyle } from "./recorded-series.js";
 import { sharedScale } from "./shared-scale.js";
 
-/** One series with what rules make of it. */
+/** One series with fitted curves. */
 export interface FittedSeries {
-  /** "" when the record has a single series. */
+  /** "" for a single series. */
   readonly name: string;
-  /** Its own horizontal axis, where that of the figure does not hold. */
+  /** Horizontal axis of this series, if it differs from the figure's. */
   readonly x?: Axis;
   readonly observed: RecordedSeries;
-  /** Single readings behind the observed values, drawn hollow. */
+  /** Replicate readings of the observed values, drawn hollow. */
   readonly replicates?: RecordedSeries;
-  readonly fitted: readonly DrawnLine[];
+  readonly fitted: readonly LineSeries[];
 }
 
-/** What `fittedFigure` draws. */
+/** Options of `fittedFigure`. */
 export interface FittedFigureOptions {
   readonly title: string;
   readonly x: Axis;
@@ -24,7 +24,7 @@ export interface FittedFigureOptions {
   readonly notes?: readonly string[];
 }
 
-/** Observed values against fitted paths, a panel a series; rivals are lines of different dash and colour. */
+/** Observed and fitted values, one panel per series; rival rules differ in dash and colour. */
 export function fittedFigure({ title, x, y, series, notes = [] }: FittedFigureOptions): Figure {
   const panels = series.map(
     (each): Panel => ({ title: each.name, x: each.x ?? x, y, layers: seriesLayers(each) }),
@@ -35,7 +35,9 @@ export function fittedFigure({ title, x, y, series, notes = [] }: FittedFigureOp
 function seriesLayers({ observed, replicates, fitted }: FittedSeries): Layer[] {
   return [
     ...fitted.map((line, turn): Layer => ({ mark: "line", ...line, style: ruleStyle(turn) })),
-    ...(replicates ? [{ mark: "points", ...replicates, look: "open", style: recordedStyle } as const] : []),
+    ...(replicates
+      ? [{ mark: "points", ...replicates, variant: "open", style: recordedStyle } as const]
+      : []),
     { mark: "points", ...observed, style: recordedStyle },
   ];
 }

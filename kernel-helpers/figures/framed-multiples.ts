@@ -1,17 +1,17 @@
 import { type Table, table } from "../tables/index.js";
 import { type Axis, type Figure, figure } from "./figure.js";
 import type { Layer } from "./layer.js";
-import { placeText } from "./period-places.js";
 import { axisTitle } from "./plot-text.js";
-import { type DrawnLine, recordedStyle } from "./recorded-series.js";
+import { positionLabel } from "./position-labels.js";
+import { type LineSeries, recordedStyle } from "./recorded-series.js";
 import type { SmallMultiplesOptions, SmallSeries } from "./small-multiples.js";
-import { yearLike } from "./year-like.js";
+import { areYears } from "./year-axis.js";
 
-/** Least and greatest value on an axis. */
+/** Smallest and largest value on an axis. */
 export type Ends = readonly [number, number];
 type Both = { readonly x: Ends; readonly y: Ends };
 
-/** All series in one panel: a grid of frames, so that a hundred cost no more to draw than one. */
+/** All series in one panel as a grid of frames, which draws as fast for a hundred series as for one. */
 export function framedMultiples(
   { title, x, y, series, notes = [] }: SmallMultiplesOptions,
   ends: Both,
@@ -37,9 +37,9 @@ export function framedMultiples(
       ({ name, column, row }): Layer => ({ mark: "label", name, x: column + 0.06, y: row + 0.98 }),
     ),
   ];
-  const from = (axis: Axis, [least, greatest]: Ends): string =>
-    `${axisTitle(axis)} from ${placeText(axis, least)} to ${placeText(axis, greatest)}`;
-  const scale = `Every frame: ${from(x, ends.x)} across, ${from(y, ends.y)} upwards.`;
+  const range = (axis: Axis, [least, greatest]: Ends): string =>
+    `${axisTitle(axis)} from ${positionLabel(axis, least)} to ${positionLabel(axis, greatest)}`;
+  const scale = `Axes of every frame: ${range(x, ends.x)} (horizontal), ${range(y, ends.y)} (vertical).`;
   const bare = { bare: true } as const;
   const panel = {
     title: "",
@@ -55,9 +55,9 @@ export function framedMultiples(
   });
 }
 
-/** A series moved and scaled into its frame. */
+/** A series scaled into its frame. */
 function inFrame(
-  line: DrawnLine,
+  line: LineSeries,
   at: { column: number; row: number },
   ends: Both,
 ): { x: number[]; y: number[] } {
@@ -69,7 +69,7 @@ function inFrame(
   };
 }
 
-/** Several lines as one, with a break after each. */
+/** Several lines as one, with a gap after each. */
 function together(lines: readonly { x: number[]; y: number[] }[]): { x: number[]; y: number[] } {
   return {
     x: lines.flatMap((line) => [...line.x, Number.NaN]),
@@ -78,9 +78,9 @@ function together(lines: readonly { x: number[]; y: number[] }[]): { x: number[]
 }
 
 function seriesTable(title: string, x: Axis, y: Axis, series: readonly SmallSeries[]): Table {
-  const grouped = !series.every(({ recorded }) => yearLike(Array.from<unknown>(recorded.x)));
+  const grouped = !series.every(({ recorded }) => areYears(Array.from<unknown>(recorded.x)));
   return table({
-    title: `Numbers behind: ${title}`,
+    title: `Data: ${title}`,
     columns: [
       { key: "name", label: "Series", kind: "text" },
       x.periods
@@ -91,7 +91,7 @@ function seriesTable(title: string, x: Axis, y: Axis, series: readonly SmallSeri
     rows: series.flatMap(({ name, recorded }) =>
       Array.from({ length: recorded.x.length }, (_, i) => ({
         name,
-        x: x.periods ? placeText(x, recorded.x[i]!) : recorded.x[i],
+        x: x.periods ? positionLabel(x, recorded.x[i]!) : recorded.x[i],
         recorded: recorded.y[i],
       })),
     ),

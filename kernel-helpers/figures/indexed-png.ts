@@ -10,15 +10,15 @@ export interface Pixels {
 const colours = 256;
 
 /**
- * A drawing as a PNG with a palette, about a quarter of the size of one with full pixels: a plot has few colours,
- * and those beyond the palette (blends at the edges of lines) take the nearest in it.
+ * A picture as a PNG with a palette, about a quarter of the size of a full-colour PNG: a plot has few colours, and colours
+ * beyond the palette (blends at the edges of lines) are replaced by the nearest one.
  *
  * @see W3C, Portable Network Graphics (PNG) Specification: chunks, colour type 3, filter type 0.
  */
 export function indexedPng({ width, height, bytes }: Pixels): Uint8Array {
   const { palette, places } = paletteOf(bytes);
   const rows = new Uint8Array((width + 1) * height);
-  // Neighbours are mostly alike: a colour is looked up only where it changes.
+  // Neighbouring pixels are mostly equal, so a colour is looked up only where it changes.
   let last = -1;
   let place = 0;
   for (let y = 0, at = 0; y < height; y++) {
@@ -61,7 +61,7 @@ function colourAt(bytes: Uint8Array, at: number): number {
   return ((bytes[at] as number) << 16) | ((bytes[at + 1] as number) << 8) | (bytes[at + 2] as number);
 }
 
-/** The commonest colours, and the place in them of every colour that occurs. */
+/** The most frequent colours, and for every colour its index in this palette. */
 function paletteOf(bytes: Uint8Array): { palette: number[]; places: Map<number, number> } {
   const counts = new Map<number, number>();
   let last = -1;
@@ -75,7 +75,7 @@ function paletteOf(bytes: Uint8Array): { palette: number[]; places: Map<number, 
   }
   counts.set(last, (counts.get(last) ?? 0) + run);
   counts.delete(-1);
-  // Ties are broken by the colour itself, so that the same drawing gives the same bytes.
+  // Ties are broken by the colour, so that the same picture gives the same bytes.
   const common = [...counts].sort((a, b) => b[1] - a[1] || a[0] - b[0]).map(([colour]) => colour);
   const palette = common.slice(0, colours);
   return {

@@ -1,89 +1,89 @@
-/** Places along an axis: numbers, or names and ISO dates on an axis that is scaled so. */
+/** Positions on an axis: numbers, or names and ISO dates on a category or date axis. */
 export type Places = ArrayLike<number> | readonly string[];
 
 interface Named {
   /** Shown in the legend and in the text alternative. */
   readonly name: string;
-  /** Which of the palette's styles (colour, dash and shape together); default: the layer's turn in its panel. */
+  /** Index of the style (colour, dash and shape) in the palette. Default: the index of the layer in its panel. */
   readonly style?: number;
   /** Default true. */
   readonly inLegend?: boolean;
 }
 
-/** Separate values. `lower` and `upper` draw a bar through each. */
+/** Separate values. `lower` and `upper` draw error bars. */
 export interface PointsLayer extends Named {
   readonly mark: "points";
   readonly x: Places;
   readonly y: Places;
   readonly lower?: ArrayLike<number>;
   readonly upper?: ArrayLike<number>;
-  /** "plain" by its style's shape; "open" the same, hollow; "flag" a large hollow diamond around a flagged value. */
-  readonly look?: "plain" | "open" | "flag";
-  /** Drawn larger than readings are: equilibria, marks of a kind of their own. */
+  /** "plain": the shape of the style; "open": the same, hollow; "flag": a large hollow diamond around a flagged value. */
+  readonly variant?: "plain" | "open" | "flag";
+  /** Drawn larger than readings, for equilibria and other special points. */
   readonly large?: boolean;
-  /** Drawn smaller, for many frames in one figure. */
+  /** Drawn smaller, for figures with many frames. */
   readonly small?: boolean;
 }
 
-/** Values joined in their order; NaN breaks the line. */
+/** Values joined in order; NaN leaves a gap. */
 export interface LineLayer extends Named {
   readonly mark: "line";
   readonly x: Places;
   readonly y: ArrayLike<number>;
-  /** Drawn broken whatever its style says. */
+  /** Dashed, whatever the style. */
   readonly dashed?: boolean;
-  /** Drawn in steps: the value holds until the next place. */
+  /** Drawn as steps: each value is kept until the next position. */
   readonly stepped?: boolean;
-  /** Drawn hair-thin and whole: frames and baselines. */
+  /** Thin and solid, for frames and baselines. */
   readonly thin?: boolean;
 }
 
-/** The area between two lines. Name its level: "80% prediction". */
+/** The area between two lines. Give its level in the name: "80% prediction". */
 export interface BandLayer extends Named {
   readonly mark: "band";
   readonly x: Places;
   readonly lower: ArrayLike<number>;
   readonly upper: ArrayLike<number>;
-  /** 0 for the outermost band of a nest, then 1, 2: the edges are dotted, broken, whole. Default 0. */
+  /** 0 for the outermost of nested bands, then 1, 2: dotted, dashed and solid edges. Default 0. */
   readonly nested?: number;
 }
 
-/** A level across the whole panel, labelled at its end. */
+/** A horizontal line across the whole panel, with a label. */
 export interface ThresholdLayer extends Named {
   readonly mark: "threshold";
   readonly y: number;
 }
 
-/** A place on the horizontal axis marked from bottom to top. */
+/** A vertical line across the whole panel, with a label. */
 export interface VerticalLayer extends Named {
   readonly mark: "vertical";
   readonly x: number | string;
 }
 
-/** Bars from zero, upright or lying (then `x` holds the lengths and `y` the names). */
+/** Bars from zero, vertical or horizontal (then `x` has the lengths and `y` the names). */
 export interface BarsLayer extends Named {
   readonly mark: "bars";
   readonly x: Places;
   readonly y: Places;
-  readonly lying?: boolean;
+  readonly horizontal?: boolean;
 }
 
-/** An arrow that says: this goes on without end. */
+/** An arrow for something that continues without limit. */
 export interface ArrowLayer extends Named {
   readonly mark: "arrow";
   readonly x: number;
   readonly y: number;
-  readonly towards: "left" | "right" | "up" | "down";
+  readonly direction: "left" | "right" | "up" | "down";
 }
 
-/** Words at a place, beginning there and hanging below it. */
+/** A text label below and to the right of a point. */
 export interface LabelLayer extends Named {
   readonly mark: "label";
   readonly x: number;
   readonly y: number;
 }
 
-/** One thing drawn on a panel. */
+/** One layer of a panel. */
 export type Layer =
   | PointsLayer
   | LineLayer

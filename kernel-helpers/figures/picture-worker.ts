@@ -1,18 +1,18 @@
-/** Draws pictures in a thread of its own, so that a cell is never held up by the drawing of its figures. */
+/** Worker thread that draws pictures, so that cells do not wait for their figures. */
 import { parentPort } from "node:worker_threads";
-import { pictureStudio } from "./picture-studio.js";
+import { pictureRenderer } from "./picture-renderer.js";
 
-/** What is asked of the worker. */
-export interface PictureOrder {
+/** A request to the worker. */
+export interface PictureRequest {
   readonly id: number;
   readonly data: readonly object[];
   readonly layout: Readonly<Record<string, unknown>>;
 }
 
-const studio = pictureStudio();
+const renderer = pictureRenderer();
 
-parentPort?.on("message", ({ id, data, layout }: PictureOrder) => {
-  studio
+parentPort?.on("message", ({ id, data, layout }: PictureRequest) => {
+  renderer
     .then((draw) => draw(data, layout))
     .then(
       (png) => parentPort?.postMessage({ id, png }),

@@ -1,7 +1,7 @@
 import type { Places } from "./layer.js";
 import { plotText } from "./plot-text.js";
 
-/** Values as plain data: names escaped, numbers to seven digits (a screen shows four), null where there is none. */
+/** Values as JSON data: names escaped, numbers to seven digits (a screen shows four), null where missing. */
 export function plainValues(values: Places, kept: readonly number[] | undefined): (number | string | null)[] {
   const places = kept ?? Array.from({ length: values.length }, (_, i) => i);
   return places.map((place) => {

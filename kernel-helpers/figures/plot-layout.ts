@@ -1,32 +1,32 @@
-import { look, typeface } from "../tables/index.js";
+import { theme, typeface } from "../tables/index.js";
 import type { Axis, Figure, Panel } from "./figure.js";
-import { type PanelPlace, panelPlaces } from "./panel-places.js";
-import { periodTicks } from "./period-places.js";
+import { type PanelPosition, panelLayout } from "./panel-layout.js";
 import { panelMarks } from "./plot-marks.js";
 import { axisTitle, plotText } from "./plot-text.js";
 import { axisName, type PlotTrace } from "./plot-traces.js";
-import { acrossYears } from "./year-like.js";
+import { periodTicks } from "./position-labels.js";
+import { hasYearAxis } from "./year-axis.js";
 
-/** Layout of the plotting library, as data; `height` in pixels. */
+/** Layout for the plotting library; `height` in pixels. */
 export type PlotLayout = Readonly<Record<string, unknown>> & { readonly height: number };
 
-/** Places panels, axes, marks and legend for a width in pixels; `still` as in `plotSpec`. */
+/** Lays out panels, axes, marks and legend for a width in pixels; `still` as in `plotSpec`. */
 export function plotLayout(
   figure: Figure,
   data: readonly PlotTrace[],
   width: number,
   still: boolean,
 ): PlotLayout {
-  const places = panelPlaces(figure.panels, width, still ? titleHeight(figure.title, width) : 0, data);
-  const each = figure.panels.map((panel, at) => ({ panel, at, place: places.panels[at] as PanelPlace }));
+  const places = panelLayout(figure.panels, width, still ? titleHeight(figure.title, width) : 0, data);
+  const each = figure.panels.map((panel, at) => ({ panel, at, place: places.panels[at] as PanelPosition }));
   const marks = each.map(({ panel, at, place }) => panelMarks(panel, at, place));
   return {
     width,
     height: places.height,
     margin: places.margin,
-    paper_bgcolor: look.paper,
-    plot_bgcolor: look.paper,
-    font: { family: typeface, size: 13, color: look.ink },
+    paper_bgcolor: theme.background,
+    plot_bgcolor: theme.background,
+    font: { family: typeface, size: 13, color: theme.text },
     hoverlabel: { font: { family: typeface, size: 13 } },
     showlegend: data.filter((trace) => trace["showlegend"]).length > 1,
     legend: { orientation: "h", x: 0, xanchor: "left", y: places.legend, yanchor: "bottom" },
@@ -65,21 +65,21 @@ function pictureTitle(title: string, width: number): object {
   };
 }
 
-function panelAxes(panel: Panel, at: number, place: PanelPlace, still: boolean): [string, object][] {
+function panelAxes(panel: Panel, at: number, place: PanelPosition, still: boolean): [string, object][] {
   const x = axisName("x", at);
   const y = axisName("y", at);
   const long = (name: string): string => name.replace(/^[xy]/, (letter) => `${letter}axis`);
-  const across = axisLook(panel.x, place.columns, still);
-  const years = acrossYears(panel) ? { separatethousands: false } : {};
+  const across = axisOptions(panel.x, place.columns, still);
+  const years = hasYearAxis(panel) ? { separatethousands: false } : {};
   const ticks = panel.x.bare ? undefined : periodTicks(panel, place.columns);
   const labelled = ticks && { tickmode: "array", ...ticks };
   return [
     [long(x), { ...across, ...years, ...labelled, domain: place.x, anchor: y }],
-    [long(y), { ...axisLook(panel.y, place.rows, still), domain: place.y, anchor: x }],
+    [long(y), { ...axisOptions(panel.y, place.rows, still), domain: place.y, anchor: x }],
   ];
 }
 
-function axisLook(axis: Axis, columns: number, still: boolean): object {
+function axisOptions(axis: Axis, columns: number, still: boolean): object {
   const type = axis.scale === undefined ? "linear" : axis.scale;
   const ends = type === "log" ? axis.ends?.map(Math.log10) : axis.ends;
   return {
@@ -93,12 +93,12 @@ function axisLook(axis: Axis, columns: number, still: boolean): object {
     ...(still ? { ticklabeloverflow: "allow" } : {}),
     ...(type === "category" ? {} : { tickangle: 0 }),
     showline: true,
-    linecolor: look.quiet,
+    linecolor: theme.mutedText,
     linewidth: 1.5,
     ticks: "outside",
-    tickcolor: look.quiet,
+    tickcolor: theme.mutedText,
     ticklen: 5,
-    // See-through, because marks are drawn beneath the grid and must not be painted over by it.
+    // Transparent, because marks are drawn below the grid and must stay visible.
     gridcolor: "rgba(22,38,46,0.11)",
     zeroline: false,
     ...(axis.bare ? { showticklabels: false, showgrid: false, ticks: "", showline: false } : {}),
@@ -109,7 +109,7 @@ function axisLook(axis: Axis, columns: number, still: boolean): object {
   };
 }
 
-function stillTitles(panel: Panel, at: number, place: PanelPlace): object[] {
+function stillTitles(panel: Panel, at: number, place: PanelPosition): object[] {
   const where = {
     xref: `${axisName("x", at)} domain`,
     yref: `${axisName("y", at)} domain`,
@@ -129,7 +129,7 @@ function stillTitles(panel: Panel, at: number, place: PanelPlace): object[] {
   ];
 }
 
-function panelHeading(panel: Panel, at: number, place: PanelPlace): object[] {
+function panelHeading(panel: Panel, at: number, place: PanelPosition): object[] {
   if (panel.title === "") return [];
   return [
     {
@@ -143,7 +143,7 @@ function panelHeading(panel: Panel, at: number, place: PanelPlace): object[] {
       yshift: 5,
       showarrow: false,
       align: "left",
-      font: { size: 13, color: look.ink },
+      font: { size: 13, color: theme.text },
     },
   ];
 }

@@ -1,21 +1,21 @@
-import { look } from "../tables/index.js";
+import { theme } from "../tables/index.js";
 import type { Panel } from "./figure.js";
 import type { ArrowLayer, Layer, ThresholdLayer, VerticalLayer } from "./layer.js";
 import { seriesStyle } from "./palette.js";
-import type { PanelPlace } from "./panel-places.js";
+import type { PanelPosition } from "./panel-layout.js";
 import { plotText } from "./plot-text.js";
 import { axisName } from "./plot-traces.js";
 
-/** What a panel's marks become: lines behind the data, and words or arrows above it. */
+/** The marks of a panel: lines behind the data, labels and arrows above it. */
 export interface Marks {
   readonly shapes: readonly object[];
   readonly annotations: readonly object[];
 }
 
-/** Thresholds, upright marks and arrows of a panel. */
-export function panelMarks(panel: Panel, at: number, place: PanelPlace): Marks {
+/** Thresholds, vertical lines, labels and arrows of a panel. */
+export function panelMarks(panel: Panel, at: number, place: PanelPosition): Marks {
   const room = Math.max(14, Math.min(34, Math.floor(place.columns * 0.6)));
-  // On a narrow screen many names would run into each other; the table behind the figure has them.
+  // On a narrow screen many labels would overlap; the data table has them.
   const crowded = place.columns < 50 && panel.layers.filter(({ mark }) => mark === "label").length > 12;
   let upright = 0;
   const marks = panel.layers.map((layer, turn): Marks => {
@@ -27,7 +27,12 @@ export function panelMarks(panel: Panel, at: number, place: PanelPlace): Marks {
       return {
         shapes: [],
         annotations: [
-          label(layer, 14, { ...where, xanchor: "left", yanchor: "top", font: { size: 9, color: look.ink } }),
+          label(layer, 14, {
+            ...where,
+            xanchor: "left",
+            yanchor: "top",
+            font: { size: 9, color: theme.text },
+          }),
         ],
       };
     }
@@ -63,7 +68,7 @@ function threshold(layer: ThresholdLayer, at: number, colour: string, room: numb
   };
 }
 
-/** Labels of several marks stand at different heights, so that near ones do not cover each other. */
+/** Labels of vertical lines are at different heights, so that close ones do not overlap. */
 function vertical(layer: VerticalLayer, at: number, colour: string, turn: number, room: number): Marks {
   const xref = axisName("x", at);
   const yref = `${axisName("y", at)} domain`;
@@ -82,7 +87,7 @@ function label(layer: Layer, room: number, where: object): object {
   return {
     text: plotText(layer.name, room, 2),
     showarrow: false,
-    font: { size: 12, color: look.ink },
+    font: { size: 12, color: theme.text },
     ...where,
     bgcolor: "rgba(255,254,251,0.82)",
     borderpad: 1,
@@ -90,9 +95,9 @@ function label(layer: Layer, room: number, where: object): object {
   };
 }
 
-/** The arrow and its words apart: drawn as one, the words would cover a short arrow. */
+/** Arrow and label separately: drawn as one, the label would cover a short arrow. */
 function arrow(layer: ArrowLayer, at: number, colour: string, room: number): object[] {
-  const [ax, ay] = tails[layer.towards];
+  const [ax, ay] = tails[layer.direction];
   const where = { xref: axisName("x", at), yref: axisName("y", at), x: layer.x, y: layer.y };
   const head = {
     ...where,
@@ -105,10 +110,10 @@ function arrow(layer: ArrowLayer, at: number, colour: string, room: number): obj
     arrowcolor: colour,
   };
   if (layer.inLegend === false) return [head];
-  const xanchor = layer.towards === "left" ? "left" : "right";
+  const xanchor = layer.direction === "left" ? "left" : "right";
   return [
     head,
-    label(layer, room, { ...where, xanchor, yanchor: "top", yshift: layer.towards === "up" ? -38 : -5 }),
+    label(layer, room, { ...where, xanchor, yanchor: "top", yshift: layer.direction === "up" ? -38 : -5 }),
   ];
 }
 

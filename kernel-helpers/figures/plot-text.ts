@@ -1,16 +1,16 @@
 import { oneLine, superscript } from "../tables/index.js";
 
 /**
- * Text for a plot's labels, which read a little HTML: shown as it is, broken into lines at words.
+ * Text for a plot label, which accepts some HTML: escaped, and wrapped at words.
  *
- * @param columns - letters a line; a longer word is cut.
- * @param lines - lines at most; what is left is replaced by an ellipsis.
+ * @param columns - characters per line; a longer word is cut.
+ * @param lines - maximum number of lines; the rest is replaced by an ellipsis.
  */
 export function plotText(text: string, columns: number, lines: number = 2): string {
   return brokenLines(oneLine(text), columns, lines).map(plotEscaped).join("<br>");
 }
 
-/** What a plot's labels read as markup, as a sign to typeset between, or as the beginning of a named sign. */
+/** Escapes markup, dollar signs (TeX) and character references. */
 function plotEscaped(text: string): string {
   return text.replace(/[&<>$]/g, (sign) => `&#${sign.codePointAt(0)};`);
 }
@@ -33,7 +33,7 @@ function brokenLines(text: string, columns: number, lines: number): string[] {
     : [...broken.slice(0, lines - 1), `${broken[lines - 1]?.replace(/…$/, "")}…`];
 }
 
-/** "Density (10⁴ cells/mL)": what an axis measures, with its unit unless that is the same word. */
+/** Axis title with unit, "Density (10⁴ cells/mL)", unless both are the same word. */
 export function axisTitle(axis: { readonly title: string; readonly unit?: string }): string {
   if (!axis.unit || axis.unit.toLowerCase() === axis.title.toLowerCase()) return axis.title;
   return `${axis.title} (${superscript(axis.unit)})`;

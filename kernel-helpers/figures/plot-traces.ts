@@ -1,18 +1,18 @@
+import { downsample } from "./downsample.js";
 import type { Panel } from "./figure.js";
 import type { BandLayer, BarsLayer, Layer, LineLayer } from "./layer.js";
 import { type SeriesStyle, seriesStyle, tint } from "./palette.js";
-import { placeText } from "./period-places.js";
 import { plainValues } from "./plain-values.js";
 import { plotText } from "./plot-text.js";
 import { pointsTrace } from "./points-trace.js";
-import { thinned } from "./thinned.js";
+import { positionLabel } from "./position-labels.js";
 
-/** One trace of the plotting library, as data. */
+/** One trace of the plotting library. */
 export type PlotTrace = Readonly<Record<string, unknown>>;
 
 const bandEdges = ["2px,3px", "7px,3px", "solid"];
 
-/** The traces of a panel; thresholds, vertical marks and arrows belong to the layout. */
+/** The traces of a panel; thresholds, vertical lines and arrows are part of the layout. */
 export function plotTraces(panel: Panel, at: number): PlotTrace[] {
   const axes = { xaxis: axisName("x", at), yaxis: axisName("y", at) };
   return panel.layers.flatMap((layer, turn) => {
@@ -20,21 +20,23 @@ export function plotTraces(panel: Panel, at: number): PlotTrace[] {
     const trace = layerTrace(layer, style);
     if (trace === undefined) return [];
     const name = plotText(layer.name, 24, 2);
-    return [{ ...trace, ...hoverOf(panel, trace), ...axes, name, showlegend: layer.inLegend !== false }];
+    return [
+      { ...trace, ...labelledHover(panel, trace), ...axes, name, showlegend: layer.inLegend !== false },
+    ];
   });
 }
 
-/** Under the pointer a labelled period shows its label, not its place on the axis. */
-function hoverOf({ x }: Panel, trace: PlotTrace): PlotTrace {
+/** Hover texts with labels of periods instead of positions on the axis. */
+function labelledHover({ x }: Panel, trace: PlotTrace): PlotTrace {
   const places = trace["x"];
   if (x.periods === undefined || trace["hoverinfo"] === "skip" || !Array.isArray(places)) return {};
   const text = places.map((place: unknown) =>
-    typeof place === "number" ? plotText(placeText(x, place), 28) : "",
+    typeof place === "number" ? plotText(positionLabel(x, place), 28) : "",
   );
   return { text, hovertemplate: "%{text}, %{y}" };
 }
 
-/** "x", "x2", "x3": what the plotting library calls the axes of a panel. */
+/** Names of panel axes in the plotting library: "x", "x2", "x3". */
 export function axisName(letter: "x" | "y", at: number): string {
   return at === 0 ? letter : `${letter}${at + 1}`;
 }
@@ -58,7 +60,7 @@ function layerTrace(layer: Layer, style: SeriesStyle): PlotTrace | undefined {
 }
 
 function lineTrace(layer: LineLayer, { colour, dash }: SeriesStyle): PlotTrace {
-  const kept = thinned(layer.x, layer.y)?.kept;
+  const kept = downsample(layer.x, layer.y)?.kept;
   const broken = layer.dashed ? "8px,4px" : dash;
   return {
     type: "scatter",
@@ -77,7 +79,7 @@ function lineTrace(layer: LineLayer, { colour, dash }: SeriesStyle): PlotTrace {
 
 /** One closed outline: along the lower edge and back along the upper. */
 function bandTrace(layer: BandLayer, { colour }: SeriesStyle): PlotTrace {
-  const kept = thinned(layer.x, layer.upper)?.kept;
+  const kept = downsample(layer.x, layer.upper)?.kept;
   const x = plainValues(layer.x, kept);
   const lower = plainValues(layer.lower, kept);
   const upper = plainValues(layer.upper, kept);
@@ -98,7 +100,7 @@ function bandTrace(layer: BandLayer, { colour }: SeriesStyle): PlotTrace {
 function barsTrace(layer: BarsLayer, { colour }: SeriesStyle): PlotTrace {
   return {
     type: "bar",
-    orientation: layer.lying ? "h" : "v",
+    orientation: layer.horizontal ? "h" : "v",
     x: plainValues(layer.x, undefined),
     y: plainValues(layer.y, undefined),
     marker: { color: tint(colour, 0.85), line: { color: colour, width: 1.5 } },

@@ -1,12 +1,12 @@
+import { downsample } from "./downsample.js";
 import type { PointsLayer } from "./layer.js";
 import type { SeriesStyle } from "./palette.js";
 import { plainValues } from "./plain-values.js";
 import type { PlotTrace } from "./plot-traces.js";
-import { thinned } from "./thinned.js";
 
-/** Separate values as a trace, with bars through them where they have bounds. */
+/** Separate values as a trace, with error bars where they have limits. */
 export function pointsTrace(layer: PointsLayer, style: SeriesStyle): PlotTrace {
-  const kept = thinned(layer.x, layer.y)?.kept;
+  const kept = downsample(layer.x, layer.y)?.kept;
   const y = plainValues(layer.y, kept);
   const { lower, upper } = layer;
   const bars =
@@ -18,23 +18,23 @@ export function pointsTrace(layer: PointsLayer, style: SeriesStyle): PlotTrace {
     mode: "markers",
     x: plainValues(layer.x, kept),
     y,
-    marker: { ...pointLook(layer.look ?? "plain", style), ...sizeOf(layer) },
+    marker: { ...markerStyle(layer.variant ?? "plain", style), ...sizeOf(layer) },
     ...bars,
   };
 }
 
-/** Crowded points are small and without the light rim that sets single ones off. */
-function sizeOf({ large, small, x, look }: PointsLayer): object {
+/** Dense points are small and have no outline. */
+function sizeOf({ large, small, x, variant }: PointsLayer): object {
   if (large) return { size: 13 };
-  if (look === undefined || look === "plain") {
+  if (variant === undefined || variant === "plain") {
     if (small || x.length > 600) return { size: 3, line: { width: 0 } };
   }
   return {};
 }
 
-function pointLook(look: "plain" | "open" | "flag", { colour, symbol }: SeriesStyle): object {
-  if (look === "flag") return { symbol: "diamond-open", size: 15, color: "#b3261e", line: { width: 2 } };
-  if (look === "open") return { symbol: `${symbol}-open`, size: 9, color: colour, line: { width: 2 } };
+function markerStyle(variant: "plain" | "open" | "flag", { colour, symbol }: SeriesStyle): object {
+  if (variant === "flag") return { symbol: "diamond-open", size: 15, color: "#b3261e", line: { width: 2 } };
+  if (variant === "open") return { symbol: `${symbol}-open`, size: 9, color: colour, line: { width: 2 } };
   return { symbol, size: 7, color: colour, line: { width: 0.75, color: "#fffefb" } };
 }
 

@@ -1,32 +1,32 @@
 import type { Places } from "./layer.js";
 
-/** One series as it was recorded. */
+/** One recorded series. */
 export interface RecordedSeries {
   readonly name: string;
   readonly x: Places;
   readonly y: ArrayLike<number>;
 }
 
-/** A line to draw over a record: a rule's path, a rule's curve. */
-export interface DrawnLine {
+/** A line to draw over a record: a trajectory or a curve. */
+export interface LineSeries {
   readonly name: string;
   readonly x: Places;
   readonly y: ArrayLike<number>;
 }
 
-/** Style of recorded values in every figure, so that a reader finds them at once. */
+/** Style of recorded values in every figure. */
 export const recordedStyle = 1;
 
-/** Styles of rules in order: the first is the one in use; none is that of recorded values. */
+/** Styles of rules in order; none is that of recorded values. */
 export function ruleStyle(turn: number): number {
   return turn === 0 ? 0 : turn + 1;
 }
 
 /**
- * A series with a break (NaN) wherever its step is longer than usual, so that no line is drawn over a gap.
- * Names and dates have no length between them and are left as they are.
+ * A series with NaN inserted wherever its step is longer than usual, so that no line is drawn across a gap. Series with
+ * names or dates are returned unchanged.
  */
-export function brokenAtGaps({ name, x, y }: RecordedSeries): RecordedSeries {
+export function breakAtGaps({ name, x, y }: RecordedSeries): RecordedSeries {
   const at = Array.from({ length: x.length }, (_, i) => x[i]);
   if (!at.every((place): place is number => typeof place === "number")) return { name, x, y };
   const steps = at.slice(1).map((place, i) => place - (at[i] as number));

@@ -1,26 +1,26 @@
 import { type Axis, type Figure, figure } from "./figure.js";
 import { significant } from "./number-text.js";
 
-/** How an answer moves when one parameter is lowered and raised. */
+/** Change of an answer when one parameter is lowered and raised. */
 export interface AnswerChange {
   readonly parameter: string;
-  /** Change of the answer, in its unit. */
+  /** Change of the answer, in its unit, when the parameter is lowered. */
   readonly lowered: number;
   readonly raised: number;
 }
 
-/** What `sensitivityFigure` draws. */
+/** Options of `sensitivityFigure`. */
 export interface SensitivityFigureOptions {
   readonly title: string;
-  /** What changes, with its unit. */
+  /** The answer, with its unit. */
   readonly answer: Axis;
-  /** By how much each parameter is moved: "one standard error", "ten per cent". The two are different figures. */
+  /** Size of the change of each parameter: "one standard error" or "10%". */
   readonly by: string;
   readonly changes: readonly AnswerChange[];
   readonly notes?: readonly string[];
 }
 
-/** Change of an answer for a small change of each parameter: bars to both sides of no change, the longest on top. */
+/** Tornado chart: change of an answer for a small change of each parameter, the largest on top. */
 export function sensitivityFigure(options: SensitivityFigureOptions): Figure {
   const { title, answer, by, changes, notes = [] } = options;
   const reach = ({ lowered, raised }: AnswerChange): number => Math.max(Math.abs(lowered), Math.abs(raised));
@@ -34,7 +34,7 @@ export function sensitivityFigure(options: SensitivityFigureOptions): Figure {
     layers: [
       {
         mark: "bars",
-        lying: true,
+        horizontal: true,
         name: `lowered by ${by}`,
         x: sorted.map((each) => each.lowered),
         y: names,
@@ -42,7 +42,7 @@ export function sensitivityFigure(options: SensitivityFigureOptions): Figure {
       },
       {
         mark: "bars",
-        lying: true,
+        horizontal: true,
         name: `raised by ${by}`,
         x: sorted.map((each) => each.raised),
         y: names,
@@ -51,7 +51,7 @@ export function sensitivityFigure(options: SensitivityFigureOptions): Figure {
     ],
     notes,
     summary: first
-      ? `${first.parameter} moves the answer most: by up to ${significant(reach(first))} ${answer.unit ?? ""}`.trim() +
+      ? `The answer is most sensitive to ${first.parameter}: it changes by up to ${significant(reach(first))} ${answer.unit ?? ""}`.trim() +
         "."
       : "",
   });

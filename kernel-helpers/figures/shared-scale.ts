@@ -2,14 +2,14 @@ import type { Panel } from "./figure.js";
 import type { Layer } from "./layer.js";
 
 /**
- * Panels of one quantity with one scale, so that groups can be compared by eye. Panels whose upright axes measure
- * different things, or on which nothing is a number, stay as they are.
+ * Gives panels of one quantity the same scale, so that groups can be compared by eye. Panels with different vertical
+ * axes, or without numbers, are returned unchanged.
  */
 export function sharedScale(panels: readonly Panel[]): readonly Panel[] {
   const named = new Set(panels.map(({ y }) => `${y.title} ${y.unit ?? ""} ${y.scale ?? ""}`));
   const heights = panels.flatMap(({ layers }) => layers.flatMap(heightsOf));
-  const least = heights.reduce((few, height) => Math.min(few, height), Number.POSITIVE_INFINITY);
-  const greatest = heights.reduce((most, height) => Math.max(most, height), Number.NEGATIVE_INFINITY);
+  const least = heights.reduce((low, height) => Math.min(low, height), Number.POSITIVE_INFINITY);
+  const greatest = heights.reduce((high, height) => Math.max(high, height), Number.NEGATIVE_INFINITY);
   if (panels.length < 2 || named.size > 1 || !(greatest > least)) return panels;
   const room = 0.05 * (greatest - least);
   return panels.map((panel) => ({ ...panel, y: { ...panel.y, ends: [least - room, greatest + room] } }));

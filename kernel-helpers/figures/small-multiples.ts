@@ -1,15 +1,15 @@
 import { type Axis, type Figure, figure, type Panel } from "./figure.js";
 import { type Ends, framedMultiples } from "./framed-multiples.js";
-import { type DrawnLine, type RecordedSeries, recordedStyle } from "./recorded-series.js";
+import { type LineSeries, type RecordedSeries, recordedStyle } from "./recorded-series.js";
 
-/** One small picture: a series, and what a rule makes of it. */
+/** One series of small multiples, with its fitted line. */
 export interface SmallSeries {
   readonly name: string;
   readonly recorded: RecordedSeries;
-  readonly fitted?: DrawnLine;
+  readonly fitted?: LineSeries;
 }
 
-/** What `smallMultiples` draws. */
+/** Options of `smallMultiples`. */
 export interface SmallMultiplesOptions {
   readonly title: string;
   readonly x: Axis;
@@ -18,17 +18,17 @@ export interface SmallMultiplesOptions {
   readonly notes?: readonly string[];
 }
 
-/** Up to so many series have axes of their own; more are drawn as frames on one pair of axes. */
-const ownAxes = 12;
+/** Up to this number, series have axes of their own; more are drawn as frames on one pair of axes. */
+const maxOwnAxes = 12;
 
 /**
- * Many series side by side on the same scale. Beyond twelve they are frames in a grid, each with its name; the scale
- * that all share is said below.
+ * Small multiples: many series side by side on the same scale. More than twelve are drawn as frames in a grid, each with
+ * its name; a note gives the common scale.
  */
 export function smallMultiples(options: SmallMultiplesOptions): Figure {
   const { title, x, y, series, notes = [] } = options;
   const ends = { x: reach(series, "x"), y: reach(series, "y") };
-  if (series.length > ownAxes) return framedMultiples(options, ends);
+  if (series.length > maxOwnAxes) return framedMultiples(options, ends);
   const panels = series.map(
     (each): Panel => ({
       title: each.name,

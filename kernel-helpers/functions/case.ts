@@ -1,6 +1,14 @@
-import { libraryAgain, warmPictures } from "../figures/index.js";
+import { resetPlotLibrary, startPictureWorker } from "../figures/index.js";
 import { checkCall } from "../options/index.js";
-import { type Bundle, escapeHtml, look, showing, superscript, typeface, untypeset } from "../tables/index.js";
+import {
+  type Bundle,
+  escapeHtml,
+  showing,
+  superscript,
+  theme,
+  typeface,
+  untypeset,
+} from "../tables/index.js";
 import { type CaseHead, caseLog, defaultSeed } from "./case-log.js";
 import { cautionOf, type Domain } from "./cautions.js";
 import { refuseEmptyAnswer, refuseNoCase, refuseUnanswered } from "./refusals.js";
@@ -31,8 +39,8 @@ export function openCase(options: CaseOptions): void {
   checkCall("openCase", arguments);
   const head: CaseHead = { ...options, seed: options.seed ?? defaultSeed };
   caseLog.open(head);
-  libraryAgain();
-  warmPictures();
+  resetPlotLibrary();
+  startPictureWorker();
   const under = [
     `Field: ${options.domain}`,
     `seed ${head.seed}`,
@@ -42,7 +50,7 @@ export function openCase(options: CaseOptions): void {
     block(
       `<p style="margin:0;font-size:20px;font-weight:600">${escapeHtml(head.title)}</p>` +
         `<p style="margin:.3em 0;font-size:16px">${escapeHtml(head.question)}</p>` +
-        `<p style="margin:0;color:${look.quiet};font-size:13px">${escapeHtml(under)}</p>`,
+        `<p style="margin:0;color:${theme.mutedText};font-size:13px">${escapeHtml(under)}</p>`,
       `${head.title}\n${head.question}\n${under}`,
       {
         "application/vnd.periodwise.case+json": { title: head.title, question: head.question, about: under },
@@ -67,7 +75,7 @@ export function answer(said: string): void {
   caseLog.noteAnswer(sentence);
   const cautions = caseLog.cautions();
   const html =
-    `<p style="margin:0;color:${look.quiet};font-size:13px;font-weight:600">Answer</p>` +
+    `<p style="margin:0;color:${theme.mutedText};font-size:13px;font-weight:600">Answer</p>` +
     answerParts(sentence) +
     cautions.map((text) => `<p style="margin:.4em 0 0">Caution: ${escapeHtml(text)}</p>`).join("");
   show(
@@ -110,6 +118,6 @@ function block(html: string, text: string, more: Bundle = {}): Shown {
 }
 
 function boxed(html: string): string {
-  const style = `border-left:4px solid ${look.accent};background:${look.shade};color:${look.ink};padding:.8em 1.1em;margin:.6em 0;font-family:${typeface};line-height:1.45;max-width:60em;overflow-wrap:anywhere`;
+  const style = `border-left:4px solid ${theme.accent};background:${theme.shaded};color:${theme.text};padding:.8em 1.1em;margin:.6em 0;font-family:${typeface};line-height:1.45;max-width:60em;overflow-wrap:anywhere`;
   return `<div class="pw-block ${untypeset}" dir="auto" style="${style}">${html}</div>`;
 }

@@ -6,7 +6,7 @@ import {
   type Observations,
   undo as undoLast,
 } from "../../src/record/index.js";
-import { columnsOf, noteFrame, notesOf, type RecordLike, toFrame } from "../dataframe/index.js";
+import { attachNotes, columnsOf, frameNotes, type RecordLike, toFrame } from "../dataframe/index.js";
 import { checkCall } from "../options/index.js";
 import { bundleOf, showing } from "../tables/index.js";
 import { caseLog } from "./case-log.js";
@@ -64,7 +64,7 @@ export function decisionsLog(record: RecordLike): DecisionsLog {
 }
 
 function sameSource(record: RecordLike, frame: DataFrame): DataFrame {
-  const { source } = notesOf(record);
-  if (source !== undefined) noteFrame(frame, { ...notesOf(frame), source });
+  const { source } = frameNotes(record);
+  if (source !== undefined) attachNotes(frame, { ...frameNotes(frame), source });
   return frame;
 }

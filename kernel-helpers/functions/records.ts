@@ -21,15 +21,15 @@ import {
   writeTables,
 } from "../../src/store/index.js";
 import {
+  attachNotes,
   columnsOf,
-  marksFound,
-  noteFrame,
-  notesOf,
+  correctionNotes,
+  frameNotes,
   type RecordLike,
   type Result,
-  shownTable,
   tablesOf,
   toFrame,
+  withCorrectionColumns,
 } from "../dataframe/index.js";
 import { checkCall } from "../options/index.js";
 import type { Observations } from "../results/index.js";
@@ -55,9 +55,9 @@ export async function readRecord(path: string, options: ReadOptions = {}): Promi
   checkCall("readRecord", arguments);
   const table = await readTable(path, options);
   const frame = toFrame(table);
-  const found = [...table.source.found, ...marksFound(table.names)];
+  const found = [...table.source.found, ...correctionNotes(table.names)];
   const source = freezeDeep({ ...table.source, found });
-  noteFrame(frame, { ...notesOf(frame), source });
+  attachNotes(frame, { ...frameNotes(frame), source });
   noteSource(source);
   return frame;
 }
@@ -95,7 +95,7 @@ function withDecisions(
   { format, table }: WriteOptions,
 ): readonly NamedTable[] {
   const { decisions = [] } = record;
-  const shown = { name: table ?? "record", table: shownTable(record) };
+  const shown = { name: table ?? "record", table: withCorrectionColumns(record) };
   if (decisions.length === 0 || !holdsSeveralTables(path, format)) return [shown];
   const name = table === undefined ? "decisions" : `${table} decisions`;
   return [shown, { name, table: tableOfRows(decisionRows(decisions)) }];
@@ -113,7 +113,7 @@ export function observations(record: RecordLike, options: ObservationOptions): O
   checkCall("observations", arguments);
   const table = columnsOf(record);
   const made = presentObservations(observe(table, frozenCopy(options)));
-  const { source } = notesOf(record);
+  const { source } = frameNotes(record);
   if (source !== undefined) noteSource(source);
   noteObservations(made, table.decisions ?? []);
   return made;

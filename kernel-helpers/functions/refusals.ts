@@ -18,17 +18,3 @@ export function refuseUnanswered(): ModelError {
 export function refuseEmptyAnswer(): ModelError {
   return new ModelError("empty-answer", "An answer is a sentence; an empty text was given.");
 }
-
-export function refuseUnknownTerm(
-  name: string,
-  nearest: readonly string[],
-  known: readonly string[],
-): ModelError {
-  const hint =
-    nearest.length > 0 ? `Did you mean "${nearest.join('" or "')}"?` : `Known: ${known.join(", ")}.`;
-  return new ModelError("unknown-term", `There is no explanation of "${name}". ${hint}`, {
-    name,
-    nearest,
-    known,
-  });
-}

@@ -115,8 +115,8 @@ function profiles(fitted: EngineFit): Figure | undefined {
     profiles: group.estimates.map(({ name, unit, value, profile, trace }) => ({
       parameter: name,
       unit,
-      held: trace.map((place) => place.value),
-      worsening: trace.map((place) => place.increase),
+      values: trace.map((place) => place.value),
+      increase: trace.map((place) => place.increase),
       estimate: value,
       lower: profile.lower,
       upper: profile.upper,

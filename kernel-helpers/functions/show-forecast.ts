@@ -102,7 +102,7 @@ function series(
     central: { name: "fitted path", x, y: shown.central },
     bands: shown.bands.map(({ level, kind, lower, upper }) => ({ level, of: kind, x, lower, upper })),
     recordEnd: x[end]!,
-    ...(horizon !== undefined && x[end + horizon] !== undefined && { horizon: x[end + horizon]! }),
+    ...(horizon !== undefined && x[end + horizon] !== undefined && { predictionHorizon: x[end + horizon]! }),
   };
 }
 

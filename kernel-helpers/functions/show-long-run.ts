@@ -164,7 +164,7 @@ export function showCobweb(found: Cobweb): readonly Figure[] {
       title: "Next value against present value",
       state: axis,
       rule: { name: "the rule", present: found.present, next: found.next },
-      path,
+      trajectory: path,
       equilibria: found.equilibria.map(({ at, verdict }) => ({
         value: at[state]!,
         stable: verdict === "undetermined" ? "undetermined" : verdict === "stable",

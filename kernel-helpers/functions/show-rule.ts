@@ -5,6 +5,7 @@ import {
   ruleLanguage,
   ruleTex,
   ruleText,
+  stateBounds,
 } from "../../src/rule/index.js";
 import { type Bundle, showing, type Table, table } from "../tables/index.js";
 import { shownTogether } from "./shown-together.js";
@@ -32,8 +33,29 @@ function namesTable(rule: Rule): Table {
       lowest: rule.bounds[name]?.[0] ?? "open",
       highest: rule.bounds[name]?.[1] ?? "open",
     })),
-    notes: [`Order of events: ${eventOrder(rule)}.`, ...rule.findings.map(({ message }) => message)],
+    notes: [
+      `Order of events: ${eventOrder(rule)}.`,
+      ...boundNotes(rule),
+      ...rule.findings.map(({ message }) => message),
+    ],
   });
+}
+
+/** What becomes of a path that passes a bound of a state. */
+function boundNotes(rule: Rule): readonly string[] {
+  const notes = stateBounds(rule).map(({ low, high, absorbsLow, absorbsHigh }, s) => {
+    const state = rule.states[s]!;
+    const sides = [
+      { bound: low, side: "below", absorbs: absorbsLow },
+      { bound: high, side: "above", absorbs: absorbsHigh },
+    ].filter(({ bound }) => Number.isFinite(bound));
+    return sides.map(({ bound, side, absorbs }) =>
+      absorbs
+        ? `Where ${state} would be ${side} ${bound} it becomes ${bound} and stays there.`
+        : `A path ends where ${state} would be ${side} ${bound}.`,
+    );
+  });
+  return notes.flat();
 }
 
 const under = (when: string | undefined): string => (when === undefined ? "always" : when);

@@ -5,6 +5,7 @@ import {
   type MatrixGrowth,
   type Trajectory,
 } from "../../src/dynamics/index.js";
+import { periodWords } from "../../src/record/index.js";
 import type { Rule } from "../../src/rule/index.js";
 import { type Figure, figure } from "../figures/index.js";
 import { type Column, type Table, table } from "../tables/index.js";
@@ -22,7 +23,13 @@ export function showPath(run: Trajectory): readonly (Figure | Table)[] {
   );
   const columns = { ...run.values, ...run.quantities };
   const names = [...rule.states, ...rule.quantities];
-  const notes = run.stop.kind === "complete" ? [] : [run.stop.reason];
+  const notes = [
+    ...run.absorbed.map(
+      ({ state, period, bound }) =>
+        `${state} reaches its bound ${bound} at ${periodWords(axis, period)} and stays there.`,
+    ),
+    ...(run.stop.kind === "complete" ? [] : [run.stop.reason]),
+  ];
   const numbers = table({
     title: "Periods",
     columns: [

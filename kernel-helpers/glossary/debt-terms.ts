@@ -1,74 +1,169 @@
-import { type Term, term } from "./term.js";
+import { type Term, termsOf } from "./term.js";
 
-/** Words about debts. Common practice, no source. */
+const term = termsOf("debts");
+
+/** Terms of loans and other debts. Common practice, no source. */
 export const debtTerms: readonly Term[] = [
   term(
-    "debts",
-    "nominal rate",
-    "A rate for a year that is divided by the number of periods to get the rate of one period, as a contract states it.",
-    { "effective rate": "the effective rate is what the periods compound to in a year, and is higher" },
+    "amortisation",
+    "Repayment of a debt by instalments that pay the interest due and part of the principal.",
+    {
+      otherNames: ["amortization"],
+      formula: "balance[t+1] = balance*(1 + i) - payment",
+      related: ["instalment", "principal", "annuity"],
+    },
   ),
   term(
-    "debts",
-    "effective rate",
-    "What one unit of money grows by in a year when the interest of every period is added and bears interest itself.",
-    { "nominal rate": "the nominal rate leaves the compounding inside the year out" },
+    "annuity",
+    "A series of equal payments at equal intervals. The level payment that repays a debt in n periods follows from its present value.",
+    {
+      formula: "payment = i*balance/(1 - (1 + i)^(-n))",
+      unit: "money per period",
+      mistakenFor: {
+        instalment: "an instalment is any single payment of a plan, and plans need not be level",
+      },
+      related: ["present value", "amortisation"],
+    },
   ),
   term(
-    "debts",
     "annual percentage rate",
-    "The yearly rate that the law of a place makes a lender state. What counts as a charge and how the year is counted differ from law to law, so the law and its date belong to the figure.",
-    { "effective rate": "the law decides which fees are in it and how it compounds" },
-    ["APR"],
+    "The yearly rate that a lender must state by law. Which charges are included and how the year is counted differ from law to law, so state the law and its date with the figure.",
+    {
+      otherNames: ["APR"],
+      unit: "per year",
+      mistakenFor: { "effective rate": "the law decides which fees are included and how interest compounds" },
+      related: ["nominal rate", "effective rate"],
+    },
   ),
-  term(
-    "debts",
-    "flat rate",
-    "Interest computed on the sum first borrowed for the whole time, although it is being paid back. The true rate is nearly twice as high, so it is converted before anything is compared.",
-    { "nominal rate": "a nominal rate is charged only on what is still owed" },
-    ["add-on rate"],
-  ),
-  term("debts", "posting date", "The day on which an entry was written into the account.", {
-    "value date": "interest runs from the value date",
+  term("arrears", "Payments that are due and have not been made.", {
+    unit: "money",
+    mistakenFor: { default: "arrears can be made good; default is declared by the lender" },
+    related: ["delinquency bucket", "default"],
   }),
-  term("debts", "value date", "The day from which an entry bears interest or stops bearing it.", {
-    "posting date": "an entry can be written down days earlier or later",
-  }),
-  term("debts", "arrears", "Payments that are due and have not been made.", {
-    default: "arrears can be made good; default is the lender's declaration that they were not",
+  term("compounding", "Adding interest to the balance, so that it bears interest itself in later periods.", {
+    formula: "balance after n periods = balance*(1 + i)^n",
+    related: ["effective rate", "nominal rate"],
   }),
   term(
-    "debts",
+    "day count",
+    "The convention for the number of days in a month and a year when interest is charged by days, such as actual/365 or 30/360.",
+    {
+      otherNames: ["day-count convention"],
+      related: ["value date", "nominal rate"],
+    },
+  ),
+  term(
     "default",
-    "The state that the contract says follows from unpaid arrears, with its own rights and rates.",
-    { arrears: "being late is not yet default" },
+    "The state that, by the contract, follows from unpaid arrears, with its own rights and rates.",
+    { mistakenFor: { arrears: "a late payment is not yet a default" }, related: ["arrears"] },
   ),
   term(
-    "debts",
     "delinquency bucket",
-    "A class of how late an account is: up to 30 days, 31 to 60, and so on. A record of counts moves between buckets from month to month.",
-    { arrears: "arrears are money; a bucket is a span of days" },
-  ),
-  term(
-    "debts",
-    "principal",
-    "The part of the debt that is the borrowed sum itself, without interest and fees.",
+    "A class of accounts by days past due: up to 30 days, 31 to 60, and so on. Counts move between buckets from month to month.",
     {
-      outstanding: "outstanding includes what has been charged and not paid",
+      unit: "accounts",
+      mistakenFor: { arrears: "arrears are an amount of money; a bucket is a range of days" },
+      related: ["arrears"],
     },
   ),
   term(
-    "debts",
+    "effective rate",
+    "The growth of one unit of money in a year when the interest of every period is added and bears interest itself.",
+    {
+      otherNames: ["effective annual rate", "annual percentage yield", "APY"],
+      formula: "(1 + j/m)^m - 1 for a nominal rate j and m periods a year",
+      unit: "per year",
+      mistakenFor: { "nominal rate": "the nominal rate ignores compounding within the year, and is lower" },
+      related: ["compounding", "annual percentage rate"],
+    },
+  ),
+  term(
+    "flat rate",
+    "Interest charged on the sum first borrowed for the whole term, although it is being repaid. The effective rate is nearly twice as high, so convert it before any comparison.",
+    {
+      otherNames: ["add-on rate"],
+      unit: "per year",
+      mistakenFor: { "nominal rate": "a nominal rate is charged only on what is still owed" },
+      related: ["effective rate"],
+    },
+  ),
+  term("instalment", "A single payment of an agreed plan.", {
+    otherNames: ["installment"],
+    unit: "money",
+    related: ["annuity", "minimum payment", "amortisation"],
+  }),
+  term("interest rate", "The price of borrowed money per period, as a fraction of the balance.", {
+    formula: "interest of a period = i*balance",
+    unit: "per period",
+    mistakenFor: {
+      "annual percentage rate": "a rate per period must be converted to a yearly rate by compounding",
+    },
+    related: ["nominal rate", "effective rate", "flat rate"],
+  }),
+  term(
+    "minimum payment",
+    "The smallest payment that a revolving account requires in a period, often a percentage of the balance with a floor in money.",
+    {
+      formula: "max(floor, share*balance), and no more than the balance",
+      unit: "money",
+      mistakenFor: { instalment: "it shrinks with the balance, so the debt is repaid much more slowly" },
+      related: ["instalment"],
+    },
+  ),
+  term(
+    "nominal rate",
+    "A yearly rate, as stated in a contract, that is divided by the number of periods in a year to get the rate per period.",
+    {
+      formula: "i = j/m for m periods a year",
+      unit: "per year",
+      mistakenFor: {
+        "effective rate": "the effective rate includes compounding within the year, and is higher",
+      },
+      related: ["effective rate", "compounding"],
+    },
+  ),
+  term(
     "outstanding",
-    "All that is owed on a day: principal, charged interest and fees not yet paid.",
+    "The total owed on a day: principal, and charged interest and fees that are not yet paid.",
     {
-      "settlement figure": "to close the account also takes interest up to that day and closing fees",
+      otherNames: ["outstanding balance", "balance"],
+      unit: "money",
+      mistakenFor: {
+        "settlement figure": "closing the account also takes interest up to that day and closing fees",
+      },
+      related: ["principal", "settlement figure"],
     },
   ),
+  term("posting date", "The day on which an entry was written into the account.", {
+    mistakenFor: { "value date": "interest runs from the value date" },
+    related: ["value date"],
+  }),
   term(
-    "debts",
-    "settlement figure",
-    "The sum that closes the account on a named day, interest to that day and closing fees included, rebates taken off.",
-    { outstanding: "the balance of the statement does not close the account" },
+    "present value",
+    "The amount today that is worth a series of future payments at a given interest rate.",
+    {
+      formula: "sum of payment[k]/(1 + i)^k; for n level payments p*(1 - (1 + i)^(-n))/i",
+      unit: "money",
+      related: ["annuity", "interest rate"],
+    },
   ),
+  term("principal", "The part of a debt that is the borrowed sum itself, without interest and fees.", {
+    unit: "money",
+    mistakenFor: { outstanding: "outstanding includes interest and fees that were charged and not paid" },
+    related: ["outstanding", "amortisation"],
+  }),
+  term(
+    "settlement figure",
+    "The sum that closes an account on a given day: balance, interest to that day and closing fees, less rebates.",
+    {
+      otherNames: ["payoff amount", "redemption figure"],
+      unit: "money",
+      mistakenFor: { outstanding: "paying the balance of the statement does not close the account" },
+      related: ["outstanding"],
+    },
+  ),
+  term("value date", "The day from which an entry bears interest, or stops bearing it.", {
+    mistakenFor: { "posting date": "an entry can be posted days earlier or later" },
+    related: ["posting date", "day count"],
+  }),
 ];

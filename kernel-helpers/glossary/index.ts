@@ -1,2 +1,5 @@
-export type { Term } from "./term.js";
-export { termOf, terms } from "./terms.js";
+export { unknownTermError } from "./errors.js";
+export { type LookUp, lookUp } from "./look-up.js";
+export type { Term, TermField } from "./term.js";
+export { explanationHtml, explanationText } from "./term-display.js";
+export { terms } from "./terms.js";

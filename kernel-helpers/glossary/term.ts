@@ -1,21 +1,43 @@
-/** A word of the trade. */
+/** Field of work that a term belongs to. */
+export type TermField = "debts" | "cultures" | "stock" | "harvest" | "general" | "rule language";
+
+/** A term of the glossary. */
 export interface Term {
   readonly name: string;
-  /** Other ways to say exactly this. */
+  /** Synonyms and abbreviations. */
   readonly otherNames: readonly string[];
-  readonly field: "debts" | "cultures" | "stock" | "every field";
-  /** What it means, in one or two sentences. */
+  readonly field: TermField;
+  /** Definition in one to three sentences. */
   readonly meaning: string;
-  /** Words it is taken for, each with the difference. */
-  readonly notToBeTakenFor: Readonly<Record<string, string>>;
+  /** Formula as plain text; "" = none. */
+  readonly formula: string;
+  /** Unit, such as "1/hour"; "" = none. */
+  readonly unit: string;
+  /** Terms it is mistaken for, each with the difference. */
+  readonly mistakenFor: Readonly<Record<string, string>>;
+  /** Other terms of the glossary to read next. */
+  readonly related: readonly string[];
 }
 
-export function term(
-  field: Term["field"],
-  name: string,
-  meaning: string,
-  notToBeTakenFor: Term["notToBeTakenFor"] = {},
-  otherNames: readonly string[] = [],
-): Term {
-  return Object.freeze({ name, otherNames, field, meaning, notToBeTakenFor });
+interface TermDetails {
+  readonly otherNames?: readonly string[];
+  readonly formula?: string;
+  readonly unit?: string;
+  readonly mistakenFor?: Readonly<Record<string, string>>;
+  readonly related?: readonly string[];
+}
+
+/** A function that defines terms of one field. */
+export function termsOf(field: TermField): (name: string, meaning: string, details?: TermDetails) => Term {
+  return (name, meaning, details = {}) =>
+    Object.freeze({
+      name,
+      field,
+      meaning,
+      otherNames: details.otherNames ?? [],
+      formula: details.formula ?? "",
+      unit: details.unit ?? "",
+      mistakenFor: details.mistakenFor ?? {},
+      related: details.related ?? [],
+    });
 }

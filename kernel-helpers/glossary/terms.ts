@@ -1,18 +1,23 @@
 import { cultureTerms } from "./culture-terms.js";
 import { debtTerms } from "./debt-terms.js";
-import { harvestTerms, shelfTerms } from "./stock-terms.js";
+import { dynamicsTerms } from "./dynamics-terms.js";
+import { evidenceTerms } from "./evidence-terms.js";
+import { fittingTerms } from "./fitting-terms.js";
+import { forecastTerms } from "./forecast-terms.js";
+import { harvestTerms } from "./harvest-terms.js";
+import { ruleTerms } from "./rule-terms.js";
+import { stockTerms } from "./stock-terms.js";
 import type { Term } from "./term.js";
 
-/** Every word explained, in the order of the fields. */
+/** All terms, grouped by field. */
 export const terms: readonly Term[] = Object.freeze([
   ...debtTerms,
   ...cultureTerms,
-  ...shelfTerms,
+  ...stockTerms,
   ...harvestTerms,
+  ...dynamicsTerms,
+  ...fittingTerms,
+  ...evidenceTerms,
+  ...forecastTerms,
+  ...ruleTerms(),
 ]);
-
-/** The term of that name or other name, whatever the case; `undefined` when there is none. */
-export function termOf(name: string): Term | undefined {
-  const wanted = name.trim().toLowerCase();
-  return terms.find((one) => [one.name, ...one.otherNames].some((known) => known.toLowerCase() === wanted));
-}

@@ -1,5 +1,5 @@
 import type { InitialValues } from "../../src/dynamics/index.js";
-import type { AtBound, Bounds } from "../../src/rule/index.js";
+import type { BoundBehaviour, Bounds } from "../../src/rule/index.js";
 import type { Argument } from "./function-schema.js";
 import {
   either,
@@ -43,7 +43,7 @@ export const boundsByName: Value<Readonly<Record<string, Bounds>>> = named(
       {
         range: required(limits, "Lowest and highest value of the state"),
         atBounds: required(
-          oneOf<AtBound>("absorbed", "error"),
+          oneOf<BoundBehaviour>("absorbed", "error"),
           "What becomes of the state there: it stays at the bound for good, or the path ends",
         ),
       },

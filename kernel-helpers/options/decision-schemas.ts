@@ -57,7 +57,7 @@ const shared: Schema<Shared> = {
       "Of a rule: random change by state; every measure is then one of the paths' distribution",
     ),
   ),
-  paths: optional(whole(1, 4000), "Paths where chance has a part", 4000),
+  paths: optional(whole(1, 4000), "Random paths where chance has a part", 4000),
   seed,
   onProgress,
   signal,
@@ -81,7 +81,7 @@ const solveOptions: Schema<SolveOptions> = {
   ),
   multiple: optional(
     positive,
-    "The setting comes in multiples of this (0.01 for money, 1 for pieces); with `atMost` and `atLeast` only multiples are tried, and the first that meets the target is given, with `is` the nearest multiple",
+    "The value comes in multiples of this (0.01 for money, 1 for pieces); with `atMost` and `atLeast` only they are tried, with `is` the nearest is given",
   ),
   level: intervalLevel,
 };
@@ -198,8 +198,8 @@ const nextReadingOptions: Schema<NextReadingOptions> = {
         "{ from: 20, to: 30 }",
       ),
     ),
-    "Periods at which it could be taken, by number or label: a list, or two ends",
-    "every period after the record, whose own periods are looked at only where they are given here, as for samples that were kept",
+    "Periods at which it could be taken, by number or label: a list, or two ends; those within the record only where they are given, as for samples that were kept",
+    "every period after the record",
   ),
   answer: optional(measure, "Measure whose margin is to be narrowed; needed for a single fit"),
   state: optional(nameOf("state", "N"), "What is read", "the first state"),

@@ -51,7 +51,7 @@ export const fitOptions: Schema<FitOptions> = {
   ),
   initial: optional(
     firstValues,
-    "Initial states that are known exactly, by state (oldest first where the rule reads past values); otherwise a trajectory fit estimates them",
+    'Initial states that are known exactly, by state (oldest first where the rule reads past values); otherwise a trajectory fit estimates them; with `errors: "both"` the filter begins there, without error',
   ),
   factor: optional(
     named(text("q"), '{ B: "q" }', "state"),

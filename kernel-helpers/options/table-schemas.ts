@@ -160,7 +160,7 @@ const layers: Readonly<Record<Layer["mark"], Fields>> = {
     y: required(namedPlaces, "Places along the vertical axis"),
     lower: limit("Lower end of a bar through each"),
     upper: limit("Upper end of a bar through each"),
-    look: optional(
+    variant: optional(
       oneOf("plain", "open", "flag"),
       "By its style's shape, hollow, or a large hollow diamond around a flagged value",
       '"plain"',
@@ -191,14 +191,14 @@ const layers: Readonly<Record<Layer["mark"], Fields>> = {
   bars: {
     ...named,
     x,
-    y: required(namedPlaces, "Heights, or names where bars lie"),
-    lying: yes("Whether bars lie: then `x` holds the lengths and `y` the names"),
+    y: required(namedPlaces, "Heights, or names where bars are horizontal"),
+    horizontal: yes("Whether bars are horizontal: then `x` holds the lengths and `y` the names"),
   },
   arrow: {
     ...named,
     x: place("Where it begins, horizontally"),
     y: place("Where it begins, vertically"),
-    towards: required(oneOf("left", "right", "up", "down"), "Where it points"),
+    direction: required(oneOf("left", "right", "up", "down"), "Where it points"),
   },
   label: {
     ...named,

@@ -1,68 +1,67 @@
 import { checkCall } from "../options/index.js";
-import { progressLine, progressRecord, type Standing } from "./progress-line.js";
-import { type ProgressPlace, presentPlace } from "./progress-place.js";
-import { refuseInterrupted } from "./refusals.js";
+import { interruptedError } from "./errors.js";
+import { finalLine, type ProgressState, progressLine } from "./progress-line.js";
+import { currentOutput, type ProgressOutput } from "./progress-output.js";
 
-/** A piece of work that says how far it is. */
+/** Progress of a calculation. */
 export interface Progress {
   readonly kind: "progress";
-  /** Says how much is done, and of how much when that has become known. */
+  /** Sets the amount done, and the total if it is now known. */
   readonly at: (done: number, of?: number) => void;
-  /** Says that so much more is done; default 1. */
+  /** Adds to the amount done; default 1. */
   readonly advance: (by?: number) => void;
-  /** Ends the line as a record of what was done, and gives that record. Short work leaves nothing. */
+  /** Ends the line and returns the final text. Short work leaves no line. */
   readonly end: () => string;
 }
 
-/** Seconds of work before anything is shown, between two showings, and before a record is worth keeping. */
-const patience = 1;
-const pace = 0.2;
-const memorable = 5;
+/** Seconds before anything is shown, between two updates, and before the final line is kept. */
+const showAfter = 1;
+const updateEvery = 0.2;
+const keepAfter = 5;
 
 /**
- * Shows how far a long piece of work is: what, how much of how much, how fast, and the time left. In a notebook one
- * display is updated in place, in a terminal one line; both end as a plain record, or as nothing when the work took
- * less than five seconds.
+ * Shows the progress of a long calculation: amount done, total, speed and time left. A notebook display or a terminal
+ * line is updated in place; it ends as a final line, or disappears when the work took less than five seconds.
  *
- * An interrupt of the cell is obeyed at the next `at` or `advance`.
+ * An interrupt of the cell takes effect at the next `at` or `advance`.
  *
- * @param total - how much there is to do; undefined when unknown.
+ * @param total - the total amount; undefined when unknown.
  * @throws {ModelError} `interrupted`, from `at` and `advance`.
- * @example progress("Refits", 200).kind; // "progress"
+ * @example progress("Resamples", 200).kind; // "progress"
  */
 export function progress(label: string, total?: number): Progress {
   checkCall("progress", arguments);
-  return progressAt(presentPlace(), label, total);
+  return progressAt(currentOutput(), label, total);
 }
 
-/** Progress shown at a given place. */
-export function progressAt(place: ProgressPlace, label: string, total?: number): Progress {
-  const began = place.now();
+/** Progress on a given output. */
+export function progressAt(output: ProgressOutput, label: string, total?: number): Progress {
+  const began = output.now();
   let done = 0;
   let all = total;
   let shownAt = Number.NEGATIVE_INFINITY;
   let record: string | undefined;
-  const standing = (): Standing => ({
+  const state = (): ProgressState => ({
     label,
     done,
     total: all,
-    seconds: Math.max(1e-3, place.now() - began),
+    seconds: Math.max(1e-3, output.now() - began),
   });
   const end = (stopped: boolean): string => {
     if (record !== undefined) return record;
-    record = progressRecord(standing(), stopped);
-    const kept = stopped || standing().seconds >= memorable;
-    if (shownAt > Number.NEGATIVE_INFINITY || stopped) place.show(kept ? record : "", undefined, true);
+    record = finalLine(state(), stopped);
+    const kept = stopped || state().seconds >= keepAfter;
+    if (shownAt > Number.NEGATIVE_INFINITY || stopped) output.show(kept ? record : "", undefined, true);
     return record;
   };
   const at = (now: number, of: number | undefined = all): void => {
     done = now;
     all = of;
-    if (place.interrupted()) throw refuseInterrupted(end(true));
-    const { seconds } = standing();
-    if (record !== undefined || seconds < patience || seconds - shownAt < pace) return;
+    if (output.interrupted()) throw interruptedError(end(true));
+    const { seconds } = state();
+    if (record !== undefined || seconds < showAfter || seconds - shownAt < updateEvery) return;
     shownAt = seconds;
-    place.show(progressLine(standing()), all === undefined ? undefined : done / all, false);
+    output.show(progressLine(state()), all === undefined ? undefined : done / all, false);
   };
   return Object.freeze({
     kind: "progress",

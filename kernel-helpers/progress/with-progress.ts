@@ -2,9 +2,9 @@ import { checkCall } from "../options/index.js";
 import { type Progress, progress } from "./progress.js";
 
 /**
- * Does a piece of work that reports its progress, and ends the line whatever comes of it.
+ * Runs a calculation that reports its progress, and ends the progress line in any case.
  *
- * @returns what the work returns; a promise when that is one.
+ * @returns the return value of `work`; a promise if that is one.
  * @example withProgress("Sum", 3, ({ advance }) => { let sum = 0; for (const x of [1, 2, 3]) { sum += x; advance(); } return sum; }); // 6
  */
 export function withProgress<T>(label: string, total: number | undefined, work: (shown: Progress) => T): T {

@@ -10,21 +10,21 @@ import {
 } from "../wording/index.js";
 import type { Column } from "./table.js";
 
-/** Shown where there is no value. */
-export const absent = "–";
+/** Shown for a missing value. */
+export const missingMark = "–";
 
 type Row = Readonly<Record<string, unknown>>;
 
 /**
- * A cell as text, by its column's kind and the digits that count.
+ * A cell as text, by the kind of its column and its significant digits.
  *
- * @param decimals - for a column of plain numbers whose decimals are settled together.
+ * @param decimals - common decimals of a column of plain numbers.
  * @returns text with "-" for minus; `absent` for undefined, null and NaN.
  */
 export function cellText(column: Column, row: Row, signs: NumberFormat, decimals?: number): string {
-  const format = signsOf(column, signs);
+  const format = columnFormat(column, signs);
   const value = row[column.key];
-  if (value === undefined || value === null || Number.isNaN(value)) return absent;
+  if (value === undefined || value === null || Number.isNaN(value)) return missingMark;
   if (typeof value === "bigint") return formatDigits(wholeText(column, value, format), format);
   if (typeof value === "number" && Number.isFinite(value) && decimals !== undefined) {
     return formatDigits(fixedDecimals(value, decimals), format);
@@ -37,7 +37,7 @@ export function cellText(column: Column, row: Row, signs: NumberFormat, decimals
   return String(value);
 }
 
-function signsOf({ grouped = true }: Column, format: NumberFormat): NumberFormat {
+function columnFormat({ grouped = true }: Column, format: NumberFormat): NumberFormat {
   return grouped ? format : { ...format, group: "" };
 }
 
@@ -69,7 +69,7 @@ function estimateText(column: Column, value: number, row: Row, format: NumberFor
   const error = positive(row[column.pairedWith ?? column.key]);
   if (error === undefined) return significant(value, column.digits ?? 3, format);
   const decimals = decimalsFor(error, 2);
-  // A standard error of 0.0000012 would push a column of zeros in front of every digit that counts.
+  // A standard error of 0.0000012 would put a row of zeros in front of the significant digits.
   if (decimals > 8 || decimals < -6)
     return powerOfTen(value, Math.max(0, exponentOf(value) + decimals), format);
   return formatDigits(fixedDecimals(value, decimals), format);

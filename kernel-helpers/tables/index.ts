@@ -5,7 +5,6 @@ export {
   superscript,
   untypeset,
 } from "../wording/index.js";
-export { look, typeface } from "./look.js";
 export { oneLine } from "./plain-text.js";
 export { type Bundle, bundleOf, showing } from "./show-itself.js";
 export { tabSeparated } from "./tab-separated.js";
@@ -19,3 +18,4 @@ export {
 } from "./table.js";
 export { tableHtml } from "./table-html.js";
 export { tableText } from "./table-text.js";
+export { theme, typeface } from "./theme.js";

@@ -1,5 +1,4 @@
-// Control characters, and the marks that reorder the text around them: they could blank a terminal's line or
-// show a number backwards.
+// Control characters and bidirectional marks, which could erase a terminal line or show a number backwards.
 const unsafe = /[\p{Cc}\u200e\u200f\u061c\u202a-\u202e\u2066-\u2069\u2028\u2029]+/gu;
 const wide =
   /\p{Script=Han}|\p{Script=Hiragana}|\p{Script=Katakana}|\p{Script=Hangul}|\p{Emoji_Presentation}|\ufe0f|[\uff01-\uff60\uffe0-\uffe6\u3000-\u303e]/u;
@@ -13,12 +12,12 @@ function signsOf(text: string): Intl.Segments {
   return segmenter.segment(text);
 }
 
-/** Text from a client's file made harmless for one line of a terminal: whatever acts on it becomes a space. */
+/** Text as one safe terminal line: control characters become spaces. */
 export function oneLine(text: string): string {
   return text.replace(unsafe, " ").trim();
 }
 
-/** Columns that a text takes in a terminal: two for wide signs and pictures, none for combining marks. */
+/** Width of a text in terminal columns: two for wide characters and emoji, none for combining marks. */
 export function displayWidth(text: string): number {
   // Plain Latin text, the usual case, needs no segmenting.
   if (/^[\x20-\x7e]*$/.test(text)) return text.length;
@@ -30,8 +29,8 @@ export function displayWidth(text: string): number {
   return width;
 }
 
-/** Text cut to at most so many terminal columns, with an ellipsis where something is missing. */
-export function shortened(text: string, columns: number): string {
+/** Text cut to at most this number of terminal columns, with an ellipsis if shortened. */
+export function truncated(text: string, columns: number): string {
   if (displayWidth(text) <= columns) return text;
   let kept = "";
   let width = 1;

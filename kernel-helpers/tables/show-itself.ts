@@ -1,18 +1,18 @@
 import { freezeDeep } from "../../src/numeric/index.js";
 
-/** What is shown of a value: one representation a MIME type, `text/plain` always among them. */
+/** Representations of a value by MIME type; `text/plain` is always present. */
 export type Bundle = Readonly<Record<string, string | object>>;
 
-/** The name of the method by which a value shows itself; the kernel looks for it. */
+/** Method by which a value displays itself; the kernel calls it. */
 const shows: unique symbol = Symbol.for("mime-bundle") as never;
 
 /**
- * Gives a result a way to show itself that no listing, copy or comparison of it sees, and freezes it to its last part.
+ * Adds a hidden display method to a result, which listings, copies and comparisons ignore, and freezes it deeply.
  *
  * The result is not copied: what is kept beside an object (a rule's graph and code) is found again under the same one.
  *
- * @param result - a plain object; one that shows itself already, or that somebody froze before, is left as it is.
- * @param bundle - makes the representations when a front end asks, not before.
+ * @param result - a plain object; one that has a display method, or is frozen already, stays as it is.
+ * @param bundle - creates the representations; called only when a front end displays the result.
  * @returns the same object, frozen.
  * @example showing({ kind: "note", text: "two gaps" }, () => ({ "text/plain": "two gaps" }));
  */
@@ -23,9 +23,9 @@ export function showing<T extends object>(result: T, bundle: () => Bundle | Prom
 }
 
 /**
- * The representations of a value that shows itself.
+ * The representations of a value that displays itself.
  *
- * @returns the bundle, or undefined when the value has no way to show itself.
+ * @returns the bundle; undefined when the value has no display method.
  */
 export async function bundleOf(value: unknown): Promise<Bundle | undefined> {
   if (typeof value !== "object" || value === null) return undefined;

@@ -1,12 +1,12 @@
 import { checkCall } from "../options/index.js";
 import { minorUnits } from "../wording/index.js";
-import { headings } from "./laid-out.js";
 import { oneLine } from "./plain-text.js";
 import type { Column, Table } from "./table.js";
+import { headings } from "./table-layout.js";
 
 /**
- * A table as tab-separated text for a spreadsheet: every row, headings first, numbers at full precision with
- * the decimal sign of the table's format and no grouping; an absent value is an empty cell.
+ * A table as tab-separated text for a spreadsheet: headings and all rows, numbers at full precision with the decimal sign
+ * of the table and without grouping; a missing value is an empty cell.
  *
  * @example tabSeparated(table({ title: "", columns: [{ key: "n", label: "Week", kind: "integer" }], rows: [{ n: 1 }] }));
  */
@@ -26,10 +26,10 @@ function plain(value: unknown, column: Column, { format }: Table): string {
   }
   if (typeof value === "number" || typeof value === "bigint")
     return String(value).replace(".", format.decimal);
-  return guarded(oneLine(value instanceof Date ? value.toISOString() : String(value)));
+  return escapeFormula(oneLine(value instanceof Date ? value.toISOString() : String(value)));
 }
 
-/** A spreadsheet would run a text that begins like a formula; an apostrophe keeps it a text. */
-function guarded(text: string): string {
+/** A spreadsheet would evaluate a text that starts like a formula; an apostrophe keeps it text. */
+function escapeFormula(text: string): string {
   return /^[=+@-]/.test(text) && Number.isNaN(Number(text)) ? `'${text}` : text;
 }

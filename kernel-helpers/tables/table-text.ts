@@ -1,32 +1,32 @@
 import { superscript } from "../wording/index.js";
-import { type Cell, laidOut } from "./laid-out.js";
-import { displayWidth, oneLine, shortened } from "./plain-text.js";
+import { displayWidth, oneLine, truncated } from "./plain-text.js";
 import type { Table } from "./table.js";
+import { type Cell, tableLayout } from "./table-layout.js";
 
-const widestCell = 44;
+const maxCellWidth = 44;
 
-/** A table as text that lines up in a terminal. */
+/** A table as aligned text for a terminal. */
 export function tableText(table: Table): string {
-  const laid = laidOut(table);
-  const all = [laid.headings, ...laid.rows, ...laid.totals];
-  const marks = laid.headings.map((_, j) => Math.max(...all.map((line) => markLine(line[j]).length)));
+  const layout = tableLayout(table);
+  const all = [layout.headings, ...layout.rows, ...layout.totals];
+  const marks = layout.headings.map((_, j) => Math.max(...all.map((line) => markLine(line[j]).length)));
   const lines = all.map((line) =>
-    line.map((cell, j) => cellLine(cell, line === laid.headings ? 0 : (marks[j] ?? 0))),
+    line.map((cell, j) => cellLine(cell, line === layout.headings ? 0 : (marks[j] ?? 0))),
   );
-  const widths = laid.headings.map((_, j) => Math.max(...lines.map((line) => displayWidth(line[j] ?? ""))));
+  const widths = layout.headings.map((_, j) => Math.max(...lines.map((line) => displayWidth(line[j] ?? ""))));
   const drawn = lines.map((line) =>
     line
-      .map((text, j) => padded(text, widths[j] ?? 0, laid.headings[j]))
+      .map((text, j) => padded(text, widths[j] ?? 0, layout.headings[j]))
       .join("  ")
       .trimEnd(),
   );
   const rule = widths.map((width) => "─".repeat(width)).join("  ");
   const [top = "", ...body] = drawn;
-  const rows = body.slice(0, laid.rows.length);
-  if (laid.cutAfter !== undefined) rows.splice(laid.cutAfter, 0, "…");
+  const rows = body.slice(0, layout.rows.length);
+  if (layout.truncatedAfter !== undefined) rows.splice(layout.truncatedAfter, 0, "…");
   if (rows.length === 0) rows.push("(no rows)");
-  const totals = body.slice(laid.rows.length);
-  const notes = laid.notes.map(({ mark, text }) => (mark === "" ? "" : `${mark}: `) + oneLine(text));
+  const totals = body.slice(layout.rows.length);
+  const notes = layout.notes.map(({ mark, text }) => (mark === "" ? "" : `${mark}: `) + oneLine(text));
   return [
     oneLine(superscript(table.title)),
     "",
@@ -38,12 +38,12 @@ export function tableText(table: Table): string {
   ].join("\n");
 }
 
-/** Numbers are followed by room for the widest mark of their column, so that marks do not push them out of line. */
+/** Numbers are followed by space for the widest footnote mark of their column, so that they stay aligned. */
 function cellLine(cell: Cell, room: number): string {
   const { text, numeric } = cell;
   const line = numeric ? text.replace(/[\u2007\u2008]/g, " ") : oneLine(text);
-  // The padding that lines up decimal signs must survive, so numbers are not trimmed.
-  const shown = shortened(/^[-<>]?\d/.test(line) && numeric ? line : oneLine(line), widestCell);
+  // Numbers are not trimmed, to keep the padding that aligns decimal signs.
+  const shown = truncated(/^[-<>]?\d/.test(line) && numeric ? line : oneLine(line), maxCellWidth);
   return shown + (numeric ? markLine(cell).padEnd(room) : markLine(cell));
 }
 

@@ -1,21 +1,22 @@
 import { frozenCopy } from "../../src/numeric/index.js";
 import { checkCall } from "../options/index.js";
 import { type NumberFormat, numberFormat } from "../wording/index.js";
-import { columnRepeated, noColumns } from "./refusals.js";
+import { duplicateColumnError, noColumnsError, unknownColumnKindError } from "./errors.js";
 import { showing } from "./show-itself.js";
 import { tableHtml } from "./table-html.js";
 import { tableText } from "./table-text.js";
 
-/** How a column's values are written; see `Column`. */
-export type ColumnKind = "text" | "integer" | "number" | "estimate" | "money" | "percent" | "probability";
+const kinds = ["text", "integer", "number", "estimate", "money", "percent", "probability"] as const;
+
+/** How the values of a column are written; see `Column`. */
+export type ColumnKind = (typeof kinds)[number];
 
 /**
- * One column. Kinds, and how each writes a number:
- * `integer` whole; `number` to `digits` significant digits (default 4); `estimate` to the decimal at which the
- * standard error under `pairedWith` has its second digit (the standard error's own column may leave it out);
- * `money` to the minor unit, whole minor units when the value is a bigint; `percent` a share, times 100, to
- * `digits` decimals (default 1); `probability` to the first digit of its Monte-Carlo error under `pairedWith`,
- * else to `digits` decimals (default 3). A text in any of them ("not determined") is shown as that text.
+ * One column. Its kind decides how numbers are written: `integer` whole; `number` to `digits` significant digits (default
+ * 4); `estimate` to the second digit of the standard error in the column `pairedWith` (not needed for the standard error
+ * itself); `money` to the minor unit, where a bigint counts minor units; `percent` a share times 100, to `digits`
+ * decimals (default 1); `probability` to the first digit of its Monte Carlo error in `pairedWith`, otherwise to `digits`
+ * decimals (default 3). A text in a column of any kind ("not determined") is shown as it is.
  */
 export interface Column {
   /** Where rows hold the value. */
@@ -32,11 +33,13 @@ export interface Column {
   readonly digits?: number;
   /** Whether digits are set apart in thousands; false for a year; default true. */
   readonly grouped?: boolean;
-  /** Key of the standard error (estimate) or Monte-Carlo error (probability) that says how many digits count. */
+  /**
+   * Key of the standard error (estimate) or Monte-Carlo error (probability) that says how many digits count.
+   */
   readonly pairedWith?: string;
 }
 
-/** What stands below a table: a sentence, with a mark at a heading or a cell when `column` (and `row`) name one. */
+/** A note below a table, with a mark at a heading or cell when `column` (and `row`) are given. */
 export interface Footnote {
   /** What the note says. */
   readonly text: string;
@@ -46,21 +49,21 @@ export interface Footnote {
   readonly row?: number;
 }
 
-/** A table as data: what it says, not how it looks. */
+/** A table as data: its content, not its style. */
 export interface Table {
   readonly kind: "table";
   readonly title: string;
   readonly columns: readonly Column[];
   readonly rows: readonly Readonly<Record<string, unknown>>[];
-  /** Rows set apart at the foot: sums, means. */
+  /** Rows at the foot: sums, means. */
   readonly totals: readonly Readonly<Record<string, unknown>>[];
   readonly notes: readonly (string | Footnote)[];
-  /** At most so many rows are shown; the count of the others is said. */
+  /** Maximum number of rows shown; a note gives the number of all rows. */
   readonly limit: number;
   readonly format: NumberFormat;
 }
 
-/** What `table` takes. */
+/** Options of `table`. */
 export interface TableOptions {
   /** Title of the table. */
   readonly title: string;
@@ -79,9 +82,9 @@ export interface TableOptions {
 }
 
 /**
- * Makes a table that shows itself: HTML for a notebook or page, lined-up text for a terminal.
+ * Makes a table: HTML for a notebook or page, aligned text for a terminal.
  *
- * Every text is escaped. An absent value is an en dash, and a note says so.
+ * All texts are escaped. A missing value is shown as an en dash, with a note.
  *
  * @throws {ModelError} `no-columns` | `column-repeated`.
  * @example table({ title: "Levels", columns: [{ key: "n", label: "Week", kind: "integer" }], rows: [{ n: 1 }] });
@@ -104,14 +107,15 @@ export function table(options: TableOptions): Table {
   return showing(made, () => ({ "text/html": tableHtml(made), "text/plain": tableText(made) }));
 }
 
-/** Any object can be read by key; what it lacks is an absent value. */
+/** Any object can be a row; a property it lacks is a missing value. */
 type Row = Readonly<Record<string, unknown>>;
 
 function checkColumns(columns: readonly Column[], title: string): void {
-  if (columns.length === 0) throw noColumns(title);
+  if (columns.length === 0) throw noColumnsError(title);
   const seen = new Set<string>();
-  for (const { key } of columns) {
-    if (seen.has(key)) throw columnRepeated(key, title);
+  for (const { key, kind } of columns) {
+    if (seen.has(key)) throw duplicateColumnError(key, title);
+    if (!kinds.includes(kind)) throw unknownColumnKindError(kind, key, kinds);
     seen.add(key);
   }
 }

@@ -1,4 +1,4 @@
-import { termOf, terms } from "../../kernel-helpers/glossary/index.js";
+import { lookUp, terms } from "../../kernel-helpers/glossary/index.js";
 import type { StringLanguage } from "../kernel/index.js";
 
 /** Completion and help inside `explain("...")`. */
@@ -10,7 +10,7 @@ export const glossaryTerms: StringLanguage = {
     const items = names.filter((name) => name.toLowerCase().startsWith(begun));
     return { start: 0, end: text.length, items: items.map((name) => ({ text: name, kind: "term" })) };
   },
-  inspect: (text) => termOf(text)?.meaning,
+  inspect: (text) => lookUp(text)?.term.meaning,
   // An unknown term is rejected by the function itself, with the nearest ones.
   check: () => [],
 };

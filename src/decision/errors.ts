@@ -60,6 +60,12 @@ export function measureNameError(name: string, known: readonly string[]): ModelE
 }
 
 export function measureWindowError(from: number, to: number, ahead: number): ModelError {
+  if (from < 1)
+    return new ModelError(
+      "outside-projection",
+      `A measure looks ahead, from period 1 on; ${from} was given. Give a period of 1 to ${ahead}; the present value is in the result of \`forecast\` at the record's end, and of \`simulate\` in its first row.`,
+      { from, to, ahead },
+    );
   const asked = from === to ? `Period ${from} ahead was` : `Periods ${from} to ${to} ahead were`;
   return new ModelError(
     "outside-projection",
@@ -77,11 +83,15 @@ export function quantileError(quantile: number): ModelError {
   );
 }
 
-export function noChanceError(name: string): ModelError {
+/** @param states - those of the rule, which alone can have random change. */
+export function noChanceError(name: string, states: readonly string[]): ModelError {
+  const given = states.includes(name) ? name : states[0]!;
+  const which =
+    given === name ? "" : ` of a state (${list(states)}; ${name} is a quantity, which follows from them)`;
   return new ModelError(
     "nothing-random",
-    `The probability that ${name} gets to a level needs a rule with random change. Give it, as in noise: { ${name}: { distribution: "normal", sd: 1 } }, or ask for a \`time\` instead.`,
-    { name },
+    `The probability that ${name} gets to a level needs a rule with random change${which}. Give it, as in noise: { ${given}: { distribution: "normal", sd: 1 } }, or ask for a \`time\` instead.`,
+    { name, states },
   );
 }
 
@@ -132,6 +142,32 @@ export function noTargetError(aim: number | undefined): ModelError {
 export function probabilityTargetError(aim: number): ModelError {
   const hint = aim > 1 && aim <= 100 ? `: write ${aim / 100} for ${aim}%` : `; ${aim} was given`;
   return new ModelError("probability-outside", `A probability is from 0 to 1${hint}.`, { aim });
+}
+
+/** Periods in words, and as they are typed: so many ahead as the number given, and the last. */
+interface AskedTimes {
+  readonly asked: string;
+  readonly present: string;
+  readonly first: string;
+  readonly last: string;
+  readonly ahead: string | undefined;
+  readonly example: string;
+}
+
+export function pastTimeError(
+  key: string,
+  aim: number,
+  { asked, present, first, last, ahead, example }: AskedTimes,
+): ModelError {
+  const hint =
+    ahead === undefined
+      ? `, as in ${key}: ${example}`
+      : `; ${aim} ${aim === 1 ? "period" : "periods"} ahead is ${key}: ${ahead}`;
+  return new ModelError(
+    "time-past",
+    `The time \`${key}\` of the target, ${aim} in the numbers of the record, is ${asked}, before the present, ${present}. A time that can be asked for is from ${first} to ${last}${hint}.`,
+    { aim, first, last },
+  );
 }
 
 /** @param past - what is past, as a clause. */

@@ -49,7 +49,7 @@ export interface Fit {
  * @throws {ModelError} `argument-missing` | `errors-not-stated` | `unknown-spread` | `bad-spread` | `factor-without-trajectory` |
  *   `robust-not-by-squares` | `rule-jumps` |
  *   `states-not-recorded` | `too-few-observations` | `no-change` | `no-logarithm` | `not-a-count` | `all-censored` |
- *   `no-finite-start` | `unit-scales-differ` | `unknown-name` | `start-outside-bounds` | `input-not-recorded` | `input-missing-in-period`.
+ *   `no-finite-start` | `part-of-start` | `bounds-reversed` | `factor-name-taken` | `censored-in-filter` | `unit-scales-differ` | `unknown-name` | `start-outside-bounds` | `input-not-recorded` | `input-missing-in-period`.
  * @see Bates, D. M. and Watts, D. G. (1988), Nonlinear Regression Analysis and Its Applications, chapters 2 and 6.
  * @example
  * const crowding = recurrence("ΔN = r*N*(1 - N/K)");

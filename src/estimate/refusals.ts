@@ -38,6 +38,25 @@ export function groupError(name: string | undefined, groups: readonly string[]):
   return new ModelError("which-group", `Option \`group\`: ${said}. It has ${has}.`, { group: name, groups });
 }
 
+export function refuseReversedBounds(name: string, [lower, upper]: readonly [number, number]): ModelError {
+  return new ModelError(
+    "bounds-reversed",
+    `Option \`bounds\`: the lower bound ${lower} of "${name}" lies above the upper bound ${upper}. Write { bounds: { ${keyOf(name)}: [${upper}, ${lower}] } }.`,
+    { name, bounds: [lower, upper] },
+  );
+}
+
+/** @param role - what else the name stands for. */
+export function refuseTakenFactor(state: string, name: string, role: string, free: string): ModelError {
+  return new ModelError(
+    "factor-name-taken",
+    `Option \`factor\`: "${name}" is already ${role}, and the factor of ${state} is an unknown of its own. Give it another name, as { factor: { ${state}: "${free}" } }.`,
+    { state, name },
+  );
+}
+
+const keyOf = (name: string): string => (/^\w+$/.test(name) ? name : `"${name}"`);
+
 export function refuseStartOutsideBounds(
   name: string,
   value: number,
@@ -47,6 +66,19 @@ export function refuseStartOutsideBounds(
     "start-outside-bounds",
     `The start ${value} of "${name}" lies outside its bounds, ${bounds[0]} to ${bounds[1]}. Move the start or the bounds.`,
     { name, value, bounds },
+  );
+}
+
+export function refusePartOfStart(
+  states: readonly string[],
+  open: readonly { readonly name: string }[],
+): ModelError {
+  const missing = open.map(({ name }) => name);
+  return new ModelError(
+    "part-of-start",
+    `Option \`initial\` gives part of the first state; ${missing.join(", ")} is missing. With \`errors: "both"\` give a value, or ` +
+      `a list of them, oldest first, where the rule reads past values, for every one of ${states.join(", ")}, or leave \`initial\` out.`,
+    { missing },
   );
 }
 
@@ -148,6 +180,15 @@ export function refuseAllCensored(group: ObservedGroup, state: string, side: "ab
     `Every value of ${state}${named(group)} is only known to lie ${side} its limit: nothing tells how far. At least some exact ` +
       "values are needed; until then only a one-sided statement is possible.",
     { group: group.name, state, side },
+  );
+}
+
+export function refuseFilteredLimit(group: ObservedGroup, state: string, row: number): ModelError {
+  return new ModelError(
+    "censored-in-filter",
+    `Row ${row}${named(group)}: ${state} is only known up to a limit (a censored value), and \`errors: "both"\` would take the limit for a ` +
+      'reading. Write `errors: "observation"` or `errors: "process"`, which count such values as beyond their limit.',
+    { group: group.name, state, row },
   );
 }
 

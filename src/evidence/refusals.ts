@@ -25,6 +25,22 @@ export function refuseUnlikeStarts(first: number, second: number): ModelError {
   );
 }
 
+/** @param counts - of the readings that each of the two fits explains. */
+export function refuseUnlikeFilters(
+  [first, second]: readonly [string, string],
+  [one, two]: readonly [number, number],
+  states: readonly string[],
+): ModelError {
+  const known = states.map((state) => `${state}: ...`).join(", ");
+  return new ModelError(
+    "unlike-starts",
+    `"${first}" counts ${one} readings and "${second}" ${two}, of the same record: one of them takes the first reading from the ` +
+      "rule's long-run distribution, the other begins at it. Give both fits the same first state, " +
+      `\`initial: { ${known} }\`, so that both count the readings after it.`,
+    { first, second, counts: [one, two] },
+  );
+}
+
 export function refuseUnlikeErrors(): ModelError {
   return new ModelError(
     "unlike-errors",

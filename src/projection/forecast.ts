@@ -21,7 +21,7 @@ export interface Forecast {
  * (`future observation`) the errors of single values.
  *
  * Parameters are drawn from a multivariate t around the estimates, sigma with them, or along the profile where the
- * record leaves one open. With errors in the observation the rule runs from its initial state and the reading's error is added on top;
+ * record leaves one open or its profile is bent; draws are kept in proportion to the likelihood of the record. With errors in the observation the rule runs from its initial state and the reading's error is added on top;
  * with errors in the process it runs from the last recorded value and every step has its own error.
  *
  * A rule whose nearby paths part (positive Lyapunov exponent) keeps its point path only up to the horizon of

@@ -21,7 +21,7 @@ export type { ProcessNoise, Rule } from "./rule.js";
 export { ruleLabel, ruleLines } from "./rule-label.js";
 export { type RuleLanguage, ruleLanguage } from "./rule-language.js";
 export { ruleText } from "./rule-text.js";
-export { type AtBound, type StateBound, stateBounds, withinBound } from "./state-bounds.js";
+export { type BoundBehaviour, type StateBound, stateBounds, withinBound } from "./state-bounds.js";
 export {
   intervalAlgebra,
   isLinearInStates,

@@ -10,7 +10,7 @@ import type { Rule } from "./rule.js";
 import { defineRule, storeDefinition } from "./rule-definition.js";
 import { unitFindings } from "./units/unit-findings.js";
 
-const hasMore = (bounds: Bounds): bounds is Extract<Bounds, { range: unknown }> => "range" in bounds;
+const statesBehaviour = (bounds: Bounds): bounds is Extract<Bounds, { range: unknown }> => "range" in bounds;
 
 /** What each entry gives, under the same name; entries that give nothing are left out. */
 function mapped<T, U>(
@@ -55,8 +55,8 @@ export function makeRule(text: string, options: RecurrenceOptions, named?: Named
     inputs: [...checked.inputs],
     parameters: [...checked.parameters],
     units,
-    bounds: mapped(given, (each) => [hasMore(each) ? each.range : each]),
-    atBounds: mapped(given, (each) => (hasMore(each) ? [each.atBounds] : [])),
+    bounds: mapped(given, (each) => [statesBehaviour(each) ? each.range : each]),
+    atBounds: mapped(given, (each) => (statesBehaviour(each) ? [each.atBounds] : [])),
     start,
     fixed,
     initial,

@@ -1,14 +1,14 @@
 import type { ProcessNoise } from "./rule.js";
-import type { AtBound } from "./state-bounds.js";
+import type { BoundBehaviour } from "./state-bounds.js";
 
-/** Lowest and highest value; for a state also what becomes of it there. */
+/** Lowest and highest value; for a state also what happens there. */
 export type Bounds =
   | readonly [number, number]
   | {
       /** Lowest and highest value of the state. */
       readonly range: readonly [number, number];
       /** What becomes of the state there: it stays at the bound for good, or the path ends. */
-      readonly atBounds: AtBound;
+      readonly atBounds: BoundBehaviour;
     };
 
 /** Options of a rule. */

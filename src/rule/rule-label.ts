@@ -1,7 +1,7 @@
 import type { Rule } from "./rule.js";
 
 /**
- * What a rule is called in a title, table or sentence: its name, or its lines.
+ * Label of a rule in titles, tables and sentences: its name, otherwise its statements.
  *
  * @example ruleLabel(recurrence("ΔN = r*N*(1 - N/K)", { name: "crowding" })); // "crowding"
  */
@@ -10,7 +10,7 @@ export function ruleLabel(rule: Rule): string {
 }
 
 /**
- * The lines of a rule in one, without comments.
+ * The statements of a rule on one line, without comments.
  *
  * @example ruleLines(recurrence("births = R*N   # a year\nN[t+1] = births")); // "births = R*N; N[t+1] = births"
  */

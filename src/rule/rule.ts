@@ -1,6 +1,6 @@
 import type { Warning } from "../numeric/index.js";
 import type { NamedRule } from "./catalogue/named-rule.js";
-import type { AtBound } from "./state-bounds.js";
+import type { BoundBehaviour } from "./state-bounds.js";
 
 /** Process noise of one state: added to the value (`normal`), or as a factor exp(sd*z) (`lognormal`). */
 export interface ProcessNoise {
@@ -14,7 +14,7 @@ export interface ProcessNoise {
 /** A recurrence, read from text and checked. */
 export interface Rule {
   readonly kind: "rule";
-  /** What it is called in titles, tables and sentences; absent where neither the options nor the catalogue say. */
+  /** Name in titles, tables and sentences; absent if neither the options nor the catalogue give one. */
   readonly name?: string;
   /** The text as given, normalised (NFC), comments kept. */
   readonly text: string;
@@ -35,8 +35,8 @@ export interface Rule {
   readonly units: Readonly<Record<string, string>>;
   /** Lower and upper bound by parameter or state. */
   readonly bounds: Readonly<Record<string, readonly [number, number]>>;
-  /** By state, where stated: what becomes of it at its bounds. */
-  readonly atBounds: Readonly<Record<string, AtBound>>;
+  /** What happens at the bounds of a state, by state, where the options say so. */
+  readonly atBounds: Readonly<Record<string, BoundBehaviour>>;
   /** Starting values for a fit, by parameter. */
   readonly start: Readonly<Record<string, number>>;
   /** Parameters held at a value in every fit. */

@@ -1,13 +1,13 @@
 import type { Rule } from "./rule.js";
 
 /**
- * What becomes of a state at its bounds. `absorbed`: a value beyond the bound becomes the bound and stays there for good,
- * as a cleared debt stays 0 and a collapsed stock is gone. `error`: the rule means nothing beyond them, so the path
- * ends there. A value that the rule itself puts on the bound is left to the rule.
+ * What happens when a state passes a bound. `absorbed`: it takes the value of the bound and keeps it, as a repaid debt
+ * stays 0 and an extinct stock stays 0. `error`: the rule is not valid beyond the bound, and the path ends there. A value
+ * that the rule puts exactly on the bound is not changed.
  */
-export type AtBound = "absorbed" | "error";
+export type BoundBehaviour = "absorbed" | "error";
 
-/** Lowest and highest value of a state, and whether a path that gets there stays there. */
+/** Lowest and highest value of a state, and which of the two absorb it. */
 export interface StateBound {
   readonly low: number;
   readonly high: number;
@@ -15,7 +15,7 @@ export interface StateBound {
   readonly absorbsHigh: boolean;
 }
 
-/** The bounds of every state in order; open where none are stated. A lower bound of 0 absorbs unless stated otherwise. */
+/** Bounds of every state, in order; infinite if none are stated. A lower bound of 0 absorbs unless stated otherwise. */
 export function stateBounds(rule: Rule): readonly StateBound[] {
   return rule.states.map((state) => {
     const [low, high] = rule.bounds[state] ?? [Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY];
@@ -29,7 +29,7 @@ export function stateBounds(rule: Rule): readonly StateBound[] {
   });
 }
 
-/** A value as it stands within its bounds: itself, the bound that absorbs it, or NaN where the path ends. */
+/** A value within its bounds: unchanged, the bound that absorbs it, or NaN where the path ends. */
 export function withinBound({ low, high, absorbsLow, absorbsHigh }: StateBound, value: number): number {
   if (value >= low && value <= high && Number.isFinite(value)) return value;
   if (absorbsLow && value < low) return low;

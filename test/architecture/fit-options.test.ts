@@ -1,4 +1,4 @@
-// What a fit was made with is asked of its problem: outside src/estimate nobody reads the options of a fit.
+// Outside src/estimate no code reads the options of a fit; it asks the problem of the fit.
 import { readFileSync } from "node:fs";
 import { join } from "node:path";
 import ts from "typescript";

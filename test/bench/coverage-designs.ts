@@ -15,6 +15,8 @@ export interface Design {
   /** Standard deviations on the scale of the spread. */
   readonly process?: number;
   readonly reading?: number;
+  /** Degrees of freedom of Student's t, where errors have heavier tails than normal ones. */
+  readonly tails?: number;
   /** Periods left out; limit below which a reading is only known to be below it; readings averaged a period. */
   readonly without?: (period: number) => boolean;
   readonly limit?: number;
@@ -150,6 +152,21 @@ export const designs: readonly Design[] = [
   },
   {
     ...crowd,
+    name: "robust, Beverton-Holt, 25 readings, 10%, normal errors",
+    periods: 24,
+    reading: 0.1,
+    options: { ...trajectory, robust: true },
+  },
+  {
+    ...crowd,
+    name: "robust, Beverton-Holt, 25 readings, 10%, t errors on 3",
+    periods: 24,
+    reading: 0.1,
+    tails: 3,
+    options: { ...trajectory, robust: true },
+  },
+  {
+    ...crowd,
     name: "exponential truth fitted with a capacity, 20 readings, 10%",
     rule: sheltered,
     truth: { R: 1.2, K: Number.POSITIVE_INFINITY },
@@ -177,8 +194,9 @@ export function simulated(design: Design, stream: RandomStream): Observations {
   const parameters = Float64Array.from(rule.parameters, (name) => design.truth[name]!);
   const state = Float64Array.of(design.initial);
   const kept: { t: number; value: number; below: boolean }[] = [];
+  const drawn = (): number => (design.tails === undefined ? stream.normal() : student(design.tails, stream));
   const moved = (value: number, sd: number): number =>
-    log ? value * Math.exp(sd * stream.normal()) : value + sd * stream.normal();
+    log ? value * Math.exp(sd * drawn()) : value + sd * drawn();
   for (let t = 0; t <= periods; t++) {
     const value = moved(state[0]!, reading / Math.sqrt(replicates));
     const below = limit !== undefined && value < limit;
@@ -187,6 +205,14 @@ export function simulated(design: Design, stream: RandomStream): Observations {
     if (process > 0) state[0] = moved(state[0]!, process);
   }
   return recordOf(rule.states[0]!, kept, replicates);
+}
+
+/** A Student t value on a whole number of degrees of freedom. */
+function student(degreesOfFreedom: number, stream: RandomStream): number {
+  const normal = stream.normal();
+  let squares = 0;
+  for (let k = 0; k < degreesOfFreedom; k++) squares += stream.normal() ** 2;
+  return normal / Math.sqrt(squares / degreesOfFreedom);
 }
 
 function recordOf(

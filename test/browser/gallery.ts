@@ -1,4 +1,4 @@
-import { figure, libraryAgain } from "../../kernel-helpers/figures/index.js";
+import { figure, resetPlotLibrary } from "../../kernel-helpers/figures/index.js";
 import { type Bundle, bundleOf, type Table, table } from "../../kernel-helpers/tables/index.js";
 import { figuresOfEveryKind } from "../figures/all-kinds.js";
 
@@ -87,7 +87,7 @@ export const figureCount: number = Object.keys(figuresOfEveryKind).length + 1;
 
 /** A notebook that has every kind of figure and table; two figures stand in one output, as fits show them. */
 export async function galleryNotebook(): Promise<{ cells: object[] } & Record<string, unknown>> {
-  libraryAgain();
+  resetPlotLibrary();
   const shown: Bundle[] = [];
   for (const each of [
     ...Object.values(figuresOfEveryKind),

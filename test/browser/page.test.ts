@@ -130,6 +130,6 @@ describe.runIf(browserThere)("our page, with every kind of figure and table", ()
     expect(images.length).toBeGreaterThanOrEqual(figureCount);
     const text = spawnSync("pdftotext", [pdf, "-"], { encoding: "utf8" }).stdout;
     expect(text).toContain("Every kind of column");
-    expect(text).not.toContain("Numbers behind this figure");
+    expect(text).not.toContain("Data of this figure");
   });
 });

@@ -13,7 +13,7 @@ beforeAll(() => {
 });
 afterAll(() => rmSync(folder, { recursive: true, force: true }));
 
-test("a corrected frame shows the raw and the used column, keeps its source, and can be taken back", async () => {
+test("a corrected frame shows raw and corrected values, keeps its source, and can be undone", async () => {
   const read = await readRecord("test/record/fixtures/ferry-loan.csv");
   const checked = correct(read, {
     row: 14,
@@ -47,7 +47,7 @@ const checked = (): ReturnType<typeof correct> =>
     why: "another store",
   });
 
-test("a row that is left out is marked where the record is shown", async () => {
+test("an excluded row is marked when the record is shown", async () => {
   expect(checked().column("left out").values).toEqual([false, false, false, true]);
   const shown = (await bundleOf(checked()))?.["text/plain"];
   expect(shown).toMatch(/week +Anzahl +Anzahl \(corrected\) +left out/);
@@ -56,7 +56,7 @@ test("a row that is left out is marked where the record is shown", async () => {
 });
 
 for (const ending of ["csv", "tsv", "json", "parquet", "xlsx", "duckdb"]) {
-  test(`a corrected record written as ${ending} brings back the raw, the used and the rows left out`, async () => {
+  test(`a corrected record written as ${ending} is read back with raw values, corrected values and excluded rows`, async () => {
     const path = join(folder, `stock.${ending}`);
     await writeRecord(checked(), path);
     const several = ending === "xlsx" || ending === "duckdb";
@@ -66,7 +66,7 @@ for (const ending of ["csv", "tsv", "json", "parquet", "xlsx", "duckdb"]) {
     expect(back.column("Anzahl").values).toEqual([170, -167, 160, 999]);
     expect(back.column("Anzahl (corrected)").values).toEqual([170, 167, 160, 999]);
     expect(back.column("left out").values.map(String)).toEqual(["false", "false", "false", "true"]);
-    expect(sourceOf(back)?.found.join(" ")).toContain('stands in "Anzahl (corrected)"');
+    expect(sourceOf(back)?.found.join(" ")).toContain('"Anzahl (corrected)" has the corrected ones');
     const value = "Anzahl (corrected)";
     const used = observations(back, { period: "week", step: "week", value, where: { "left out": false } });
     expect(Array.from(Object.values(used.groups[0]!.values)[0]!)).toEqual([170, 167, 160]);
@@ -74,7 +74,7 @@ for (const ending of ["csv", "tsv", "json", "parquet", "xlsx", "duckdb"]) {
 }
 
 for (const ending of ["xlsx", "duckdb"]) {
-  test(`the decisions stand in a second table of the ${ending} file`, async () => {
+  test(`the decisions are in a second table of the ${ending} file`, async () => {
     const path = join(folder, `decisions.${ending}`);
     await writeRecord(checked(), path);
     const log = await readRecord(path, { table: "decisions" });
@@ -86,7 +86,7 @@ for (const ending of ["xlsx", "duckdb"]) {
   });
 }
 
-test("a written record that is corrected again keeps every column apart", async () => {
+test("a written record that is corrected again keeps all columns separate", async () => {
   const path = join(folder, "again.csv");
   await writeRecord(checked(), path);
   const again = correct(await readRecord(path), { row: 1, column: "Anzahl", now: 171, why: "recount" });
@@ -94,7 +94,7 @@ test("a written record that is corrected again keeps every column apart", async 
   expect(again.column("Anzahl (corrected) (2)").values).toEqual([171, -167, 160, 999]);
 });
 
-test("a doubled row that an option settled is not called corrected", async () => {
+test("a duplicate row resolved by an option is not marked as corrected", async () => {
   const counted = { week: [1, 2, 2, 3], stock: [9, 8, 6, 5] };
   const options = { period: "week", step: "week", value: "stock", duplicates: "average" } as const;
   const text = (await bundleOf(observations(counted, options)))?.["text/plain"];

@@ -23,7 +23,7 @@ function plain({ groups, counts, ...rest }: Observations) {
 }
 
 describe("frames in", () => {
-  test("a frame, rows as objects and columns by name are the same record", () => {
+  test("a frame, row objects and columns by name give the same record", () => {
     const columns = { week: [1, 2, 3], stock: [90, 83, 70] };
     const rows = [
       { week: 1, stock: 90 },
@@ -44,7 +44,7 @@ describe("frames in", () => {
   });
 
   // danfo makes rows of the bytes of a typed array.
-  test("typed arrays are columns like any other", () => {
+  test("typed arrays are accepted as columns", () => {
     const made = toFrame(columnsOf({ a: Float64Array.from([1.5, 2]), b: Int32Array.from([3, 4]) }));
     expect(made.values).toEqual([
       [1.5, 3],
@@ -52,23 +52,23 @@ describe("frames in", () => {
     ]);
   });
 
-  test("a value that is no record is refused", () => {
-    expect(() => columnsOf(null as never)).toThrow("A record is a DataFrame");
-    expect(() => columnsOf({ a: 1 } as never)).toThrow('"a" is none of these');
-    expect(() => columnsOf([1, 2] as never)).toThrow('"row 1" is none of these');
+  test("a value that is not a record is rejected", () => {
+    expect(() => columnsOf(null as never)).toThrow("Not a record: null was given. Give a DataFrame");
+    expect(() => columnsOf({ a: 1 } as never)).toThrow('Not a record: column "a" is not an array.');
+    expect(() => columnsOf([1, 2] as never)).toThrow("Not a record: row 1 is not an object.");
     expect(() => columnsOf({ a: [1, 2], b: [1] })).toThrow("The columns differ in length");
   });
 });
 
 describe("frames out", () => {
   // danfo guesses a column's kind from its first rows: a text after twenty numbers would make sums of text.
-  test("the kind of a column is decided by all of its cells", () => {
+  test("the kind of a column depends on all of its cells", () => {
     const cells = [...Array.from({ length: 30 }, (_, i) => i), "n.d."];
     expect(toFrame(tableOf({ a: cells })).dtypes).toEqual(["string"]);
   });
 
   // danfo makes a property of every column name: these would replace its own members or throw.
-  test("column names that danfo cannot carry are renamed in the frame and known to the commands", () => {
+  test("column names that danfo cannot take are renamed in the frame and known to the functions", () => {
     const names = ["index", "values", "columns", "shape", "__proto__", "constructor", "", "week", "week"];
     const table: ColumnTable = { names, columns: names.map((_, i) => [i, i + 1]) };
     const made = toFrame(table);
@@ -83,7 +83,7 @@ describe("frames out", () => {
   });
 
   // danfo's own copy shares its rows with the original.
-  test("a frame made from a record shares no cell with it", () => {
+  test("a frame made from a record does not share its cells", () => {
     const read = toFrame(tableOf({ week: [1, 2], stock: [90, 83] }));
     const made = toFrame(columnsOf(read));
     made.setIndex({ index: ["a", "b"], inplace: true });
@@ -94,13 +94,13 @@ describe("frames out", () => {
     ]);
   });
 
-  test("observations are a record again", () => {
+  test("observations can be used as a record", () => {
     const counts = observations({ week: [1, 2, 4], stock: [9, 8, 6] }, options);
     expect(frame(counts).columns).toEqual(["row", "step", "week", "stock"]);
     expect(plain(observations(counts, options))).toEqual(plain(counts));
   });
 
-  test("any result is written to a workbook with a sheet a table", async () => {
+  test("any result is written to a workbook with one sheet per table", async () => {
     const counts = observations(
       { hour: [0, 1, 2, 3, 4, 5, 6], N: [10, 18, 31, 50, 69, 85, 93] },
       { period: "hour", step: "hour", value: "N" },
@@ -114,7 +114,7 @@ describe("frames out", () => {
     rmSync(folder, { recursive: true, force: true });
   });
 
-  test("a fit becomes its three views, and differences one frame", () => {
+  test("a fit gives three frames, and differences one", () => {
     const counts = observations(
       { hour: [0, 1, 2, 3, 4, 5, 6], N: [10, 18, 31, 50, 69, 85, 93] },
       { period: "hour", step: "hour", value: "N" },
@@ -126,7 +126,7 @@ describe("frames out", () => {
     expect(frame(differences(counts)).column("change").values).toEqual([8, 13, 19, 19, 16, 8]);
   });
 
-  test("a result with nested series becomes a table a list, values of its parts beside them", () => {
+  test("a result with nested series gives one table per list, with inherited values", () => {
     const made = frame({
       kind: "anything",
       seed: 4,
@@ -140,7 +140,7 @@ describe("frames out", () => {
   });
 });
 
-test("observations of several series with weights, limits and replicates come back from their frame", () => {
+test("observations of several series with weights, limits and replicates are recovered from their frame", () => {
   const rows = ["a", "b"].flatMap((item) =>
     [1, 2, 4].flatMap((week) =>
       [1, 2].map((well) => ({
@@ -183,7 +183,7 @@ test("observations of several series with weights, limits and replicates come ba
   );
 });
 
-test("any observations turned into a frame and back are the same observations", () => {
+test("any observations converted to a frame and back are unchanged", () => {
   const record = fc
     .array(
       fc.record({

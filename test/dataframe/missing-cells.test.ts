@@ -32,7 +32,7 @@ test("arithmetic on a missing cell gives a missing cell, never a number", () => 
   ]);
 });
 
-test("statistics pass a missing cell over and count what is there", () => {
+test("statistics skip missing cells", () => {
   const reading = column(readings(), "reading");
   expect(reading.mean()).toBe(2);
   expect(reading.sum()).toBe(4);
@@ -59,6 +59,6 @@ test("a missing cell is read back as missing", () => {
   expect(back.columns[2]).toEqual(["a", null, "c"]);
 });
 
-test("std of one value is not determined rather than zero", () => {
+test("the standard deviation of one value is undefined, not zero", () => {
   expect(column(toFrame(tableOf({ a: [3] })), "a").std()).toBeNaN();
 });

@@ -5,7 +5,7 @@ import { bundleOf } from "../../kernel-helpers/tables/index.js";
 
 const fixtures = "test/record/fixtures";
 
-test("a file becomes a frame, observations and differences, each showing itself", async () => {
+test("a file becomes a frame, observations and differences, each with a display", async () => {
   const frame = await readRecord(`${fixtures}/ferry-loan.csv`);
   expect(frame.columns).toEqual(["month", "closing_balance", "payment"]);
   expect(frame.shape).toEqual([24, 3]);

@@ -25,7 +25,7 @@ const two = (): DataFrame =>
   );
 
 describe("arithmetic of frames", () => {
-  test("works with a number, a series down the rows, a series across the columns, and a frame", () => {
+  test("works with a number, a series by row, a series by column, and a frame", () => {
     expect((two().mul(3) as DataFrame).values).toEqual([
       [3, 30],
       [6, 60],
@@ -58,12 +58,12 @@ describe("arithmetic of frames", () => {
     ]);
   });
 
-  test("is that of doubles: a third of an amount keeps every digit", () => {
+  test("is in double precision: a third of an amount keeps every digit", () => {
     // 1/3 in IEEE 754 double arithmetic.
     expect((two().div(3) as DataFrame).values[0]![0 as never]).toBe(0.3333333333333333);
   });
 
-  test("refuses shapes that do not fit", () => {
+  test("rejects shapes that do not match", () => {
     expect(() => two().add(new Series([1, 2]), { axis: 0 })).toThrow();
   });
 
@@ -82,7 +82,7 @@ describe("arithmetic of frames", () => {
 });
 
 describe("statistics", () => {
-  test("divide by n - 1, find middles and most frequent values, and leave one value's spread undetermined", () => {
+  test("divide by n - 1, give medians and modes, and leave the standard deviation of one value undefined", () => {
     const series = new Series([2, 4, 4, 10]);
     expect([series.mean(), series.median(), series.var(), series.std()]).toEqual([5, 4, 12, Math.sqrt(12)]);
     expect(series.mode()).toEqual([4]);
@@ -91,14 +91,14 @@ describe("statistics", () => {
     expect(new Series([3, 9, 5]).argMin()).toBe(0);
   });
 
-  test("scale to the unit interval and to standard units", () => {
+  test("scale to the unit interval and to z-scores", () => {
     expect(new MinMaxScaler().fitTransform([1, 2, 5])).toEqual([0, 0.25, 1]);
     // Mean 2, variance with n: 2/3.
     const root = Math.sqrt(2 / 3);
     expect(new StandardScaler().fitTransform([1, 2, 3])).toEqual([-1 / root, 0, 1 / root]);
   });
 
-  test("sample rows without repeating any, the same for the same seed", async () => {
+  test("sample rows without replacement, reproducibly for a seed", async () => {
     const frame = new DataFrame(
       Array.from({ length: 50 }, (_, i) => [i]),
       { columns: ["a"] },
@@ -132,7 +132,7 @@ test("the frame library is loaded on first use, not by importing the functions",
 describe.each(["typescript", "typescript-cell"])(
   "the declarations of the frame library, by %s",
   (compiler) => {
-    test("compile whole, and a frame is a frame and not anything", () => {
+    test("compile, and a frame is not of type any", () => {
       const folder = mkdtempSync(join(tmpdir(), "periodwise-types-"));
       const packages = join(import.meta.dirname, "..", "..", "node_modules");
       symlinkSync(packages, join(folder, "node_modules"));

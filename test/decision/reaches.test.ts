@@ -251,3 +251,14 @@ test("questions that cannot be asked are refused", () => {
     "An interval has a level between 0 and 1, such as 0.95; 95 was given.",
   );
 });
+
+test("a path that leaves an unstable equilibrium slowly is not said to level off", () => {
+  // ΔN = r N (1 - N/K) has the multiplier 1 + r > 1 at 0: every move away from it is larger than the one before.
+  const rule = recurrence("ΔN = r*N*(1 - N/K)", { fixed: { r: 0.0005, K: 1 } });
+  const away = timeToReach(simulate(rule, { initial: { N: 1e-6 }, periods: 6 }), { risesTo: 0.9 });
+  expect(away.groups[0]!.tendsTo).toBeUndefined();
+  const settled = timeToReach(simulate(rule, { parameters: { r: 0.8 }, initial: { N: 0.5 }, periods: 30 }), {
+    risesTo: 2,
+  });
+  expect(settled.groups[0]!.tendsTo?.value).toBeCloseTo(1, 6);
+});

@@ -21,6 +21,12 @@ test.each([
     expect(covered * records).toBeGreaterThanOrEqual(51);
 });
 
+// 190 of 200 on average, with a binomial standard deviation of 3.1: fewer than 181 lies beyond three of them.
+test.each(["normal errors", "t errors on 3"])("robust intervals hold the truth: %s", (errors) => {
+  const design = designs.find(({ name }) => name.startsWith("robust") && name.endsWith(errors))!;
+  for (const { covered } of coverageOf(design, 200, 11)) expect(covered * 200).toBeGreaterThanOrEqual(181);
+});
+
 test.each(["exponential truth fitted with a capacity", "only a product enters"])(
   "what a design cannot determine is called so: %s",
   (name) => {
@@ -30,7 +36,7 @@ test.each(["exponential truth fitted with a capacity", "only a product enters"])
   },
 );
 
-// T13. Source: R 4.2.2: mean +- 1.959963985 s/sqrt(n) of n normal values covers 2 P(t(n - 1) < 1.959963985) - 1. A simulation
+// Source: R 4.2.2: mean +- 1.959963985 s/sqrt(n) of n normal values covers 2 P(t(n - 1) < 1.959963985) - 1. A simulation
 // that is right must reproduce this wrong coverage; 20,000 samples, 4 binomial standard deviations.
 test.each([
   [5, 0.8784403402],

@@ -147,24 +147,6 @@ describe("a one-step fit", () => {
     near(of(line, "a").value, meanY - slope * meanX, 1e-9);
   });
 
-  test("steps over a gap by as many steps as periods lie between", () => {
-    const t = [0, 1, 2, 4, 5, 6, 9, 10, 11, 12];
-    const x = [50, 42, 36.5, 29, 27.2, 25.6, 22.8, 22.3, 21.6, 21.4];
-    const holes = fit(affine, record({ t, x }), { errors: "process" });
-    // k steps of x' = a + b x are b^k x + a (1 - b^k) / (1 - b).
-    const direct = leastSquares({
-      residuals: ([a, b]) =>
-        x.slice(1).map((next, i) => {
-          const power = b! ** (t[i + 1]! - t[i]!);
-          return next - (power * x[i]! + (a! * (1 - power)) / (1 - b!));
-        }),
-      start: [4, 0.8],
-    });
-    near(of(holes, "a").value, direct.estimates[0]!, 1e-8);
-    near(of(holes, "b").value, direct.estimates[1]!, 1e-8);
-    near(of(holes, "b").standardError, direct.standardErrors[1]!, 1e-6);
-  });
-
   test("reports the small-sample bias of its slope, and a slope near 1", () => {
     const stream = randomStream(1);
     const x = [0];

@@ -112,3 +112,36 @@ test("spreads and factors that no fit has", () => {
     `"A factor of the record is found from whole trajectories, not with errors: "process". Use { errors: "observation" }, or write the factor into the rule."`,
   );
 });
+
+test("bounds whose lower end lies above the upper one", () => {
+  expect(said(sheltered, grown, { ...trajectory, bounds: { K: [100, 50] } })).toMatchInlineSnapshot(
+    `"Option \`bounds\`: the lower bound 100 of "K" lies above the upper bound 50. Write { bounds: { K: [50, 100] } }."`,
+  );
+  expect(said(sheltered, grown, { ...trajectory, bounds: { "N[0]": [20, 5] } })).toMatchInlineSnapshot(
+    `"Option \`bounds\`: the lower bound 20 of "N[0]" lies above the upper bound 5. Write { bounds: { "N[0]": [5, 20] } }."`,
+  );
+  expect(said(sheltered, grown, { ...trajectory, bounds: { K: [50, 200] } })).toBe("nothing");
+});
+
+test("a factor under a name that is taken", () => {
+  expect(said(sheltered, grown, { ...trajectory, factor: { N: "K" } })).toMatchInlineSnapshot(
+    `"Option \`factor\`: "K" is already a parameter of the rule, and the factor of N is an unknown of its own. Give it another name, as { factor: { N: "q_N" } }."`,
+  );
+  const two = recurrence("A[t+1] = p*A\nB[t+1] = q*B");
+  const both = record({ A: [10, 14, 19, 26, 35, 46, 58, 70], B: [9, 8, 7, 6, 5, 4, 3, 3] });
+  expect(said(two, both, { ...trajectory, factor: { A: "s", B: "s" } })).toMatchInlineSnapshot(
+    `"Option \`factor\`: "s" is already the factor of another state, and the factor of B is an unknown of its own. Give it another name, as { factor: { B: "q_B" } }."`,
+  );
+  expect(said(two, both, { ...trajectory, factor: { A: "B" } })).toContain("already a state of the rule");
+});
+
+test("a filter does not take a limit for a reading", () => {
+  const censoring = { N: Int8Array.of(0, 0, 0, 0, 0, 0, -1, -1, 0, 0) };
+  const limited = record({ N: [100, 61, 36, 24, 12, 9, 5, 5, 4, 3] }, { censoring });
+  const decay = recurrence("N[t+1] = R*N");
+  expect(said(decay, limited, { errors: "both" })).toMatchInlineSnapshot(
+    `"Row 7: N is only known up to a limit (a censored value), and \`errors: "both"\` would take the limit for a reading. Write \`errors: "observation"\` or \`errors: "process"\`, which count such values as beyond their limit."`,
+  );
+  expect(said(decay, limited, { errors: "observation" })).toBe("nothing");
+  expect(said(decay, limited, { errors: "process" })).toBe("nothing");
+});

@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { type Estimate, type Fit, fit } from "../../src/estimate/index.js";
+import { type Estimate, type Fit, type FitOptions, fit } from "../../src/estimate/index.js";
 import { randomStream } from "../../src/numeric/index.js";
 import { recurrence } from "../../src/rule/index.js";
 import { record } from "./record.js";
@@ -83,6 +83,116 @@ describe("errors in both the process and the observation", () => {
       (profile.upper ?? Infinity) - (profile.lower ?? -Infinity);
     expect(width(of(known, "b"))).toBeLessThan(width(of(open, "b")));
   });
+});
+
+describe("records that begin far from the long run", () => {
+  const decaying = [100, 61, 36, 24, 12, 9, 4, 4, 1, 2];
+  const levelling = [100, 68, 50, 42, 33, 30, 27, 27, 24, 26, 25, 24];
+  const growing = [1.1, 2.3, 4, 7.8, 11.5, 19.8, 25.2, 38, 44, 58, 62, 75, 70, 84, 88];
+  const gompertz = "N[t+1] = N*exp(a)*N^(b - 1)";
+  const onLog: Partial<FitOptions> = { distribution: "lognormal" };
+
+  // Source: computed with SciPy's minimize on an exact Kalman filter. Diffuse start: the state begins at the first reading
+  // with the reading's variance; known start: at the value given with variance 0. Readings count from the second on.
+  test.each<{
+    text: string;
+    N: readonly number[];
+    more: Partial<FitOptions>;
+    start: "diffuse" | "known";
+    expected: Readonly<Record<string, number>>;
+    logLikelihood: number;
+  }>([
+    {
+      text: "N[t+1] = R*N",
+      N: decaying,
+      more: {},
+      start: "diffuse",
+      expected: { R: 0.6067585, "process error": 0, "observation error": 1.0516066 },
+      logLikelihood: -13.4528519,
+    },
+    {
+      text: "N[t+1] = R*N",
+      N: decaying,
+      more: { initial: { N: 95 } },
+      start: "known",
+      expected: { R: 0.6211031, "process error": 0, "observation error": 1.2797087 },
+      logLikelihood: -14.9901388,
+    },
+    {
+      text: "N[t+1] = a*N + b",
+      N: levelling,
+      more: {},
+      start: "diffuse",
+      expected: { a: 0.5914453, b: 9.9446087, "process error": 0, "observation error": 0.9753831 },
+      logLikelihood: -15.5493904,
+    },
+    {
+      text: "N[t+1] = a*N + b",
+      N: levelling,
+      more: { initial: { N: 95 } },
+      start: "known",
+      expected: { a: 0.6143923, b: 9.2242234, "process error": 0, "observation error": 0.9103119 },
+      logLikelihood: -14.5746762,
+    },
+    {
+      text: gompertz,
+      N: growing,
+      more: onLog,
+      start: "diffuse",
+      expected: { a: 0.8106436, b: 0.8354815, "process error": 0, "observation error": 0.0735133 },
+      logLikelihood: 16.0824674,
+    },
+    {
+      text: gompertz,
+      N: growing,
+      more: { ...onLog, initial: { N: 1.3 } },
+      start: "known",
+      expected: { a: 0.73137, b: 0.856485, "process error": 0.061539, "observation error": 0.060586 },
+      logLikelihood: 13.1747789,
+    },
+  ])("$text, $start start", ({ text, N, more, start, expected, logLikelihood }) => {
+    const fitted = fit(recurrence(text), record({ N }), { errors: "both", intervals: "none", ...more });
+    expect(fitted.groups[0]!.filter).toMatchObject({ start, method: "exact" });
+    for (const [name, value] of Object.entries(expected))
+      expect(Math.abs(of(fitted, name).value - value)).toBeLessThan(3e-6);
+    expect(Math.abs(fitted.criteria.logLikelihood - logLikelihood)).toBeLessThan(1e-6);
+  });
+
+  test("a known start is what the fit begins from, and is said", () => {
+    const fitted = fit(recurrence("N[t+1] = R*N"), record({ N: decaying }), {
+      errors: "both",
+      initial: { N: 95 },
+      intervals: "none",
+    });
+    expect(fitted.groups[0]!.initial).toEqual({ N: 95 });
+    expect(fitted.conventions.join(" ")).toContain("the first state is known (`initial`)");
+  });
+
+  test("part of a first state is refused; the whole of it is taken", () => {
+    const rule = recurrence("N[t+1] = R*N + b*N[t-1]");
+    const both: FitOptions = { errors: "both", intervals: "none" };
+    expect(() =>
+      fit(rule, record({ N: decaying }), { ...both, initial: { N: 61 } }),
+    ).toThrowErrorMatchingInlineSnapshot(
+      `[ModelError: Option \`initial\` gives part of the first state; N[0] is missing. With \`errors: "both"\` give a value, or a list of them, oldest first, where the rule reads past values, for every one of N, or leave \`initial\` out.]`,
+    );
+    const whole = fit(rule, record({ N: decaying }), { ...both, initial: { N: [100, 61] } });
+    expect(whole.groups[0]!.filter!.start).toBe("known");
+  });
+});
+
+test("advice on two errors that are hardly told apart asks for nothing that was given", () => {
+  const N = [100, 68, 50, 42, 33, 30, 27, 27, 24, 26, 25, 24];
+  const advice = (options: Partial<FitOptions>): string =>
+    fit(recurrence("N[t+1] = a*N + b"), record({ N }), {
+      errors: "both",
+      ...options,
+    }).groups[0]!.warnings.find(({ code }) => code === "errors-not-separated")!.message;
+  // The readings after the first have a mean of 34.2, of which 5% is 1.7.
+  expect(advice({})).toContain("`sd: 2`, in the record's unit");
+  expect(advice({ distribution: "lognormal" })).toContain("`sd: 0.15` on the log scale");
+  expect(advice({ sd: 1 })).toContain("Beside the `sd` given");
+  expect(advice({ sd: 1 })).not.toContain("give it");
 });
 
 /** Log density of a normal vector, by elimination. */

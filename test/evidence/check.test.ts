@@ -12,7 +12,7 @@ const sheltered = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)");
 
 describe("check", () => {
   // Source: computed with R 4.2 and SciPy for a made-up culture of 21 readings; printed to 3 decimals.
-  test("C-2: residuals of neighbouring readings correlate -0.285 step by step and 0.152 along the path", () => {
+  test("lag-1 autocorrelation of residuals is -0.285 one-step and 0.152 along the trajectory (R and SciPy)", () => {
     const along = check(fit(sheltered, culture, { errors: "observation", distribution: "lognormal" }));
     const steps = check(fit(sheltered, culture, { errors: "process", distribution: "lognormal" }));
     const lagOne = (checked: typeof along): number => checked.groups[0]!.tests[0]!.statistic;

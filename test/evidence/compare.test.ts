@@ -15,7 +15,7 @@ const off = (value: number, expected: number): number => Math.abs(value / expect
 
 describe("compare", () => {
   // Source: R 4.2.2, lm and AIC (which counts sigma) on the changes of uspop; printed to ten digits.
-  test("T9 and D16: AIC, AICc and BIC of four regressions of the population's changes", () => {
+  test("AIC, AICc and BIC of four regressions of the changes of uspop (R lm and AIC)", () => {
     const expected: Readonly<Record<string, readonly number[]>> = {
       "ΔN = c": [127.4733099, 128.2733099, 129.2540534],
       "ΔN = r*N": [103.7010437, 104.5010437, 105.4817872],
@@ -34,7 +34,7 @@ describe("compare", () => {
   });
 
   // Source: computed with R 4.2 and SciPy for a made-up culture of 21 readings; printed to 3 decimals.
-  test("C-2: AICc of three growth rules along the path, and the verdict", () => {
+  test("AICc of three growth rules by trajectory fit, and the verdict (R and SciPy)", () => {
     const gompertz = recurrence("N[t+1] = exp(a)*N^b");
     const fits = [sheltered, gompertz, recurrence("N[t+1] = R*N")].map((rule) => fit(rule, culture, onLog));
     const compared = compare(fits);
@@ -45,8 +45,9 @@ describe("compare", () => {
     );
   });
 
-  // Source: the record of C-3, whose first 9 readings end before growth bends: the capacity has no upper limit.
-  test("C-3: says that a rule's parameter is not determined by the record", () => {
+  // Source: profile with R 4.2 and SciPy: the first 9 readings of the record end before growth slows, so the capacity has
+  // no upper limit.
+  test("says that a parameter of a rule is not determined by the record", () => {
     const fits = [sheltered, crowding].map((rule) => fit(rule, cultureOf(9), onLog));
     expect(compare(fits).rows.find((row) => row.rule === sheltered.text)!.undetermined).toBe(true);
   });
@@ -78,7 +79,7 @@ describe("compare", () => {
     expect(own).toContain(fits[0]!.groups[0]!.criteria!.logLikelihood - logs);
   });
 
-  test("W-8: two rivals within 2 that lead to different decisions have both printed, and none is called best", () => {
+  test("two rivals within 2 units of AICc with different decisions are both printed, and none is called best", () => {
     const values = drawn(sheltered, [1.25, 100], 20, 16, 0.06, "observation", randomStream(2));
     const fits = [sheltered, crowding].map((rule) => fit(rule, series(values), onLog));
     const decide = ({ rule }: Fit): string =>
@@ -156,5 +157,25 @@ describe("compare", () => {
     expect(() => compare([along, steps])).toThrowErrorMatchingInlineSnapshot(
       `[ModelError: Fits that put the error in the process and in the observation explain different numbers (steps and values), so their likelihoods cannot be set side by side. Fit every rival with the same { errors }; check(fit) tells which kind of error the record speaks for.]`,
     );
+  });
+
+  test("filters that begin differently are refused for that, and compared from the same first state", () => {
+    const read = [
+      52, 47, 55, 49, 44, 58, 51, 46, 53, 50, 43, 48, 57, 54, 45, 50, 52, 47, 56, 49, 51, 48, 46, 54,
+    ];
+    const rivals = (options: FitOptions): Fit[] =>
+      ["N[t+1] = a*N + b", "N[t+1] = N"].map((text) => fit(recurrence(text), series(read), options));
+    const both: FitOptions = { errors: "both", intervals: "none" };
+    const apart = rivals(both);
+    expect(apart.map(({ groups }) => groups[0]!.filter!.start)).toEqual(["stationary", "diffuse"]);
+    expect(() => compare(apart)).toThrowErrorMatchingInlineSnapshot(
+      `[ModelError: "N[t+1] = a*N + b" counts 24 readings and "N[t+1] = N" 23, of the same record: one of them takes the first reading from the rule's long-run distribution, the other begins at it. Give both fits the same first state, \`initial: { N: ... }\`, so that both count the readings after it.]`,
+    );
+    const { rows } = compare(rivals({ ...both, initial: { N: 50 } }));
+    // Source: computed with SciPy's minimize on an exact Kalman filter from a known first state of 50: log-likelihoods
+    // -65.2175398 with 2 unknowns and -64.3435787 with 4.
+    expect(rows.map(({ rule }) => rule)).toEqual(["N[t+1] = N", "N[t+1] = a*N + b"]);
+    expect(Math.abs(rows[0]!.aic - 134.4350796)).toBeLessThan(1e-6);
+    expect(Math.abs(rows[1]!.aic - 136.6871574)).toBeLessThan(1e-6);
   });
 });

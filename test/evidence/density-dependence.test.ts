@@ -5,7 +5,7 @@ import { yeast } from "../published/carlson-yeast.js";
 import { series } from "./series.js";
 
 // Source: R 4.2.2, lm(log(x1/x0) ~ x0) on Carlson's yeast; coefficients printed to ten digits.
-test("Y6: the regression of growth on level", () => {
+test("regression of the log growth ratio on the level (R lm)", () => {
   const [found] = densityDependence(series(yeast), { resamples: 199 }).groups;
   expect(Math.abs(found!.intercept / 0.5217460871 - 1)).toBeLessThan(1e-9);
   expect(Math.abs(found!.slope / -0.0008031497502 - 1)).toBeLessThan(1e-9);

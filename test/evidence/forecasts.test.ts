@@ -8,7 +8,7 @@ import { series } from "./series.js";
 
 // Source: closed form of a log-linear record, sd_h = s sqrt(h + h^2/n), for g = .03, s = .06, n = 24 increments; printed
 // to 6 decimals.
-test("G-9: predictive deviations carry the uncertainty of the parameter and of every step", () => {
+test("predictive sd includes parameter uncertainty and process error of every step (closed form)", () => {
   const away = 0.06 * Math.sqrt(23 / 24);
   const logs = [0];
   for (let t = 1; t <= 24; t++) logs.push(logs[t - 1]! + 0.03 + (t % 2 === 0 ? away : -away));

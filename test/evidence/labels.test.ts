@@ -104,9 +104,9 @@ describe("a rule's name", () => {
     expect(`${(await bundleOf(crowding))!["text/plain"]}`).toContain("crowding: ΔN = r*N*(1 - N/K)");
   });
 
-  test.each([[5], [""], [null]])("%j is refused", (name) => {
+  test.each([[5], [""], [null]])("%j is an error", (name) => {
     expect(() => recurrence("N[t+1] = R*N", { name: name as string })).toThrow(
-      "Option `name` must be a text; ",
+      "Option `name` must be a non-empty string",
     );
   });
 });

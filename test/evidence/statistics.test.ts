@@ -40,7 +40,7 @@ function yeastResiduals(): number[] {
 }
 
 describe("correlation between periods", () => {
-  test("T4: autocorrelations and partial autocorrelations of the hormone series", () => {
+  test("autocorrelations and partial autocorrelations of lh (R acf and pacf)", () => {
     const lags = autocorrelations(hormone, 4);
     [0.5755244755, 0.1818181818, -0.1447552448, -0.1748251748].forEach((expected, k) => {
       expect(off(lags[k]!, expected)).toBeLessThan(1e-8);
@@ -51,7 +51,7 @@ describe("correlation between periods", () => {
     });
   });
 
-  test("T5: Ljung-Box and Box-Pierce of the hormone series to lag 5", () => {
+  test("Ljung-Box and Box-Pierce of lh to lag 5 (R Box.test)", () => {
     const improved = ljungBox(hormone, 5);
     expect(off(improved.statistic, 22.673185)).toBeLessThan(2.5e-8);
     expect(off(improved.probability, 0.0003897448)).toBeLessThan(1.3e-7);
@@ -60,7 +60,7 @@ describe("correlation between periods", () => {
     expect(off(plain.probability, 0.0007983137)).toBeLessThan(1e-7);
   });
 
-  test("T8: Durbin-Watson of stopping distances, lake level and yeast residuals", () => {
+  test("Durbin-Watson of regressions on cars, LakeHuron and the yeast record (R)", () => {
     expect(off(durbinWatson(lineResiduals(stopping.speed, stopping.distance)), 1.676225323)).toBeLessThan(
       1e-8,
     );
@@ -77,7 +77,7 @@ describe("correlation between periods", () => {
 });
 
 describe("shape of residuals", () => {
-  test("T12: Shapiro-Wilk of the yeast residuals", () => {
+  test("Shapiro-Wilk of the yeast residuals (R shapiro.test)", () => {
     const found = shapiroWilk(yeastResiduals())!;
     expect(off(found.statistic, 0.9294668909)).toBeLessThan(1e-8);
     expect(off(found.probability, 0.1900406)).toBeLessThan(2.6e-7);
@@ -141,7 +141,7 @@ describe("shape of residuals", () => {
 });
 
 describe("scores of forecasts", () => {
-  test("T10: CRPS of normal forecasts", () => {
+  test("CRPS of normal forecasts (closed form)", () => {
     const cases: readonly (readonly [number, number, number, number])[] = [
       [0, 0, 1, 0.2336949773],
       [1, 0, 1, 0.6024413576],
@@ -165,7 +165,7 @@ describe("scores of forecasts", () => {
     expect(Math.abs(crpsLognormal(2, 0.4, 0.5) - mean)).toBeLessThan(4 * Math.sqrt(variance / size));
   });
 
-  test("T11: scaled errors of the last twelve months of air passengers", () => {
+  test("MASE of the last twelve months of AirPassengers (R)", () => {
     const [before, after] = [passengers.slice(0, 132), passengers.slice(132)];
     const last = after.map((value) => value - before[131]!);
     const seasonal = after.map((value, i) => value - before[120 + i]!);

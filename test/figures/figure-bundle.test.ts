@@ -2,7 +2,7 @@ import { spawnSync } from "node:child_process";
 import { join } from "node:path";
 import { Resvg } from "@resvg/resvg-js";
 import { describe, expect, test } from "vitest";
-import { figure, libraryAgain } from "../../kernel-helpers/figures/index.js";
+import { figure, resetPlotLibrary } from "../../kernel-helpers/figures/index.js";
 import { bundleOf } from "../../kernel-helpers/tables/index.js";
 import { figuresOfEveryKind } from "./all-kinds.js";
 
@@ -12,7 +12,7 @@ const axes = { x: { title: "Week" }, y: { title: "Stock", unit: "coils" } };
 describe.each(Object.entries(figuresOfEveryKind))("a %s figure", (_, drawn) => {
   const shown = bundleOf(drawn);
 
-  test("is a picture, a plot and a text", async () => {
+  test("has a picture, a plot and a text", async () => {
     const bundle = (await shown) ?? {};
     const png = Buffer.from(String(bundle["image/png"]), "base64");
     // Source: W3C, PNG specification: signature, then the header with width and height in bytes 16 to 23.
@@ -21,7 +21,7 @@ describe.each(Object.entries(figuresOfEveryKind))("a %s figure", (_, drawn) => {
     expect(bundle["text/html"]).toContain(`base64,${bundle["image/png"]}`);
   });
 
-  test("says its title, its axes with units, and the numbers behind it as text", async () => {
+  test("gives title, axes with units, and data as text", async () => {
     const text = String((await shown)?.["text/plain"]);
     expect(text.startsWith(drawn.title)).toBe(true);
     for (const { x, y } of drawn.panels) {
@@ -32,7 +32,7 @@ describe.each(Object.entries(figuresOfEveryKind))("a %s figure", (_, drawn) => {
   });
 });
 
-test("the picture can be read by another program, and is the same each time", async () => {
+test("the picture is a valid PNG, and the same each time", async () => {
   const [a, b] = await Promise.all(
     [0, 1].map(() => bundleOf(figure({ title: "Stock", ...axes, layers: [points] }))),
   );
@@ -43,8 +43,8 @@ test("the picture can be read by another program, and is the same each time", as
   expect(Math.max(...pixels)).toBe(255);
 });
 
-test("the plotting library comes once, with at most 1.3 million characters, and can be asked for again", async () => {
-  libraryAgain();
+test("the plotting library is included once, with at most 1.3 million characters, and again after a reset", async () => {
+  resetPlotLibrary();
   const made = () => bundleOf(figure({ title: "Stock", ...axes, layers: [points] }));
   const htmls = [await made(), await made()].map((bundle) => String(bundle?.["text/html"]));
   const library = /<script data-periodwise="library">[\s\S]*?<\/script>/;
@@ -53,11 +53,11 @@ test("the plotting library comes once, with at most 1.3 million characters, and 
   expect(htmls[1]).not.toMatch(library);
   // A figure beyond the first adds its data, its picture and little else.
   expect(htmls[1]?.length).toBeLessThan(60_000);
-  libraryAgain();
+  resetPlotLibrary();
   expect(String((await made())?.["text/html"])).toMatch(library);
 });
 
-test("hostile texts stay text in every form", async () => {
+test("hostile texts stay text in every representation", async () => {
   const hostile = `<img src=x onerror=alert(1)></script><!-- $x$ "' & \u202eabc \u{1f41f}`;
   const bundle = await bundleOf(
     figure({
@@ -65,7 +65,7 @@ test("hostile texts stay text in every form", async () => {
       x: { title: hostile, unit: hostile },
       y: { title: hostile, scale: "category" },
       layers: [
-        { mark: "bars", lying: true, name: hostile, x: [1], y: [hostile] },
+        { mark: "bars", horizontal: true, name: hostile, x: [1], y: [hostile] },
         { mark: "vertical", name: hostile, x: 1 },
       ],
       notes: [hostile],
@@ -84,15 +84,15 @@ test("hostile texts stay text in every form", async () => {
   expect(bundle?.["text/plain"]).toContain("<img src=x onerror=alert(1)></script>");
 });
 
-test("a figure without anything to draw is refused in words", () => {
+test("an empty figure is rejected", () => {
   expect(() => figure({ title: "Stock" })).toThrowErrorMatchingInlineSnapshot(
-    `[ModelError: The figure "Stock" has nothing to draw. Give it x, y and layers, or panels that each have a layer.]`,
+    `[ModelError: Figure "Stock" is empty. Give \`x\`, \`y\` and \`layers\`, or \`panels\` with at least one layer each.]`,
   );
 });
 
-test("a program ends although the thread that draws pictures is still there", () => {
+test("an idle picture worker does not keep a program alive", () => {
   const built = join(import.meta.dirname, "..", "..", "dist", "kernel-helpers", "figures", "index.js");
-  const done = spawnSync(process.execPath, ["-e", `require(${JSON.stringify(built)}).warmPictures()`], {
+  const done = spawnSync(process.execPath, ["-e", `require(${JSON.stringify(built)}).startPictureWorker()`], {
     timeout: 30_000,
   });
   expect(done.status).toBe(0);

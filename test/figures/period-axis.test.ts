@@ -1,7 +1,7 @@
 import { expect, test } from "vitest";
-import { figureAccount } from "../../kernel-helpers/figures/figure-account.js";
+import { figureData } from "../../kernel-helpers/figures/figure-data.js";
+import { describeFigure } from "../../kernel-helpers/figures/figure-description.js";
 import { type Figure, figure } from "../../kernel-helpers/figures/index.js";
-import { numbersBehind } from "../../kernel-helpers/figures/numbers-behind.js";
 import { plotSpec } from "../../kernel-helpers/figures/plot-spec.js";
 import { observations, tableOf } from "../../src/record/index.js";
 
@@ -32,11 +32,11 @@ function ticksOf(shown: Figure, width: number): { tickvals: number[]; ticktext: 
   return layout["xaxis"] as { tickvals: number[]; ticktext: string[] };
 }
 
-test("an axis of dated periods has their labels at whole periods, as many as there is room for", () => {
+test("the ticks of a dated axis are labels of whole periods, as many as fit", () => {
   const monthly = drawn(["2025-01-31", "2025-02-28"], "month-end", 37);
   const wide = ticksOf(monthly, 900);
   expect(wide.ticktext[0]).toBe("2025-01-31");
-  // Every tick is a month end, and they stand a whole part of a year apart.
+  // Every tick is a month end, and the interval divides a year.
   const months = wide.tickvals[1]! - wide.tickvals[0]!;
   expect([1, 2, 3, 6, 12]).toContain(months);
   expect(wide.ticktext.at(-1)).toBe(
@@ -45,7 +45,7 @@ test("an axis of dated periods has their labels at whole periods, as many as the
   expect(ticksOf(monthly, 380).ticktext.length).toBeLessThan(wide.ticktext.length);
 });
 
-test("weeks and half hours keep their writing", () => {
+test("weeks and half hours are labelled as in the record", () => {
   expect(ticksOf(drawn(["2026-W52", "2026-W53"], "iso-week", 4), 900).ticktext).toEqual([
     "2026-W52",
     "2026-W53",
@@ -57,10 +57,10 @@ test("weeks and half hours keep their writing", () => {
   );
 });
 
-test("the text and the numbers behind the figure are dated too, and so is what the pointer shows", () => {
+test("the description, the data table and the hover text of a figure show dates too", () => {
   const shown = drawn(["2025-01-31", "2025-02-28"], "month-end", 3);
-  expect(figureAccount(shown)).toContain("record ends: marked at 2025-02-28.");
-  expect(numbersBehind(shown)[0]!.rows.map((row) => row["place"])).toEqual([
+  expect(describeFigure(shown)).toContain("record ends: vertical line at 2025-02-28.");
+  expect(figureData(shown)[0]!.rows.map((row) => row["place"])).toEqual([
     "2025-01-31",
     "2025-02-28",
     "2025-03-31",

@@ -1,19 +1,19 @@
 import { describe, expect, test } from "vitest";
-import type { DrawnProfile } from "../../kernel-helpers/figures/index.js";
+import type { ProfileCurve } from "../../kernel-helpers/figures/index.js";
 import { smoothProfile } from "../../kernel-helpers/figures/smooth-profile.js";
 
-const parabola: DrawnProfile = {
+const parabola: ProfileCurve = {
   parameter: "r",
   unit: "",
-  held: [-2, -1, 0, 1, 2],
-  worsening: [4, 1, 0, 1, 4],
+  values: [-2, -1, 0, 1, 2],
+  increase: [4, 1, 0, 1, 4],
   estimate: 0,
   lower: -1.9,
   upper: 1.9,
 };
 
 describe("smoothProfile", () => {
-  test("draws the parabola of a linear parameter exactly, from five places of it", () => {
+  test("draws the parabola of a linear parameter exactly from five points", () => {
     // Source: in a linear least-squares problem the profile is a parabola (Bates and Watts 1988, section 6.1).
     const { x, y } = smoothProfile(parabola, 10);
     expect(x.length).toBeGreaterThan(40);
@@ -22,11 +22,11 @@ describe("smoothProfile", () => {
     });
   });
 
-  test("stops at the greatest height asked for", () => {
+  test("stops at the maximum increase", () => {
     expect(Math.max(...smoothProfile(parabola, 2).y)).toBeLessThanOrEqual(2);
   });
 
-  test("does not follow a side without a limit to where the search for one ended", () => {
+  test("does not extend an open side to the end of the search", () => {
     const far = {
       ...parabola,
       held: [-2, -1, 0, 1, 2, 1e9],

@@ -81,10 +81,10 @@ describe("completion", () => {
 
 describe("inspection", () => {
   test("shows type and docstring of the package's functions as Markdown", async () => {
-    const told = await about("recurr|ence");
-    expect(told).toMatch(/^```typescript\n.*function recurrence\(text: string/s);
-    expect(told).toContain("Reads a rule of change from text");
-    expect(await about("expl|ain")).toContain("*param* name");
+    const text = await about("recurr|ence");
+    expect(text).toMatch(/^```typescript\n.*function recurrence\(text: string/s);
+    expect(text).toContain("Reads a rule of change from text");
+    expect(await about("expl|ain")).toContain("*param* word");
   });
 
   test("at detail level 1 adds errors and an example", async () => {
@@ -118,8 +118,8 @@ describe("the text of a rule", () => {
     );
     expect(stdout).toBe("");
     expect(reply["ename"]).toBe("SyntaxError");
-    const told = (reply["traceback"] as readonly string[]).at(-1) ?? "";
-    const [line = "", caret = ""] = told.split("\n").slice(-2);
+    const text = (reply["traceback"] as readonly string[]).at(-1) ?? "";
+    const [line = "", caret = ""] = text.split("\n").slice(-2);
     expect(line.slice(caret.indexOf("^"), caret.lastIndexOf("^") + 1)).toContain("N");
   });
 

@@ -72,6 +72,7 @@ const inAnotherMeaning: Readonly<Record<string, string>> = {
   "Optimum.curve.value": "the same",
   "SensitivityRow.value": "value of a parameter",
   "GroupReach.tendsTo.value": "level that a path tends to",
+  "ArrowLayer.direction": "where an arrow points",
   "BoundsPassed.value": "value outside a bound",
 };
 

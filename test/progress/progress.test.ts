@@ -30,15 +30,15 @@ function watched(): {
   return { clock, lines, stop, place };
 }
 
-test("progress says what, how far, how fast and the time left", () => {
+test("progress shows the amount done, the total, the speed and the time left", () => {
   const { clock, lines, place } = watched();
   const shown = progressAt(place, "Refits", 1200);
   clock.seconds = 4;
   shown.at(300);
-  expect(lines).toEqual(["Refits: 300 of 1,200 (25%), 75 a second, 12 s left"]);
+  expect(lines).toEqual(["Refits: 300 of 1,200 (25%), 75 per second, 12 s left"]);
 });
 
-test("work under a second shows nothing, and a line is not shown more than five times a second", () => {
+test("work under a second shows nothing, and updates are at most five per second", () => {
   const { clock, lines, place } = watched();
   const shown = progressAt(place, "Refits", 100);
   clock.seconds = 0.9;
@@ -51,20 +51,20 @@ test("work under a second shows nothing, and a line is not shown more than five 
   expect(lines).toHaveLength(1);
 });
 
-test("it ends once, as a plain record", () => {
+test("it ends once, with a final line", () => {
   const { clock, lines, place } = watched();
   const shown = progressAt(place, "Refits", 200);
   clock.seconds = 2;
   shown.at(100);
   clock.seconds = 8;
   shown.at(200);
-  expect(shown.end()).toBe("Refits: 200 of 200 in 8.0 s, 25 a second.");
+  expect(shown.end()).toBe("Refits: 200 of 200 in 8.0 s, 25 per second.");
   shown.end();
-  expect(lines.at(-1)).toBe("Refits: 200 of 200 in 8.0 s, 25 a second.");
+  expect(lines.at(-1)).toBe("Refits: 200 of 200 in 8.0 s, 25 per second.");
   expect(lines).toHaveLength(3);
 });
 
-test("work of a few seconds leaves no line behind", () => {
+test("work of a few seconds leaves no line", () => {
   const { clock, lines, place } = watched();
   const shown = progressAt(place, "Refits", 200);
   clock.seconds = 2;
@@ -73,15 +73,15 @@ test("work of a few seconds leaves no line behind", () => {
   expect(lines).toEqual([expect.stringContaining("100 of 200"), ""]);
 });
 
-test("without a known total it counts", () => {
+test("without a total it counts", () => {
   const { clock, lines, place } = watched();
   const shown = progressAt(place, "Series");
   clock.seconds = 2;
   shown.advance(3000);
-  expect(lines).toEqual(["Series: 3,000 done, 1,500 a second"]);
+  expect(lines).toEqual(["Series: 3,000 done, 1,500 per second"]);
 });
 
-test("an interrupt is obeyed at the next step, and the record says where it stopped", () => {
+test("an interrupt takes effect at the next step, and the final line says where it stopped", () => {
   const { clock, lines, stop, place } = watched();
   const shown = progressAt(place, "Refits", 200);
   clock.seconds = 3;
@@ -91,7 +91,7 @@ test("an interrupt is obeyed at the next step, and the record says where it stop
       name: "ModelError",
       code: "interrupted",
       message:
-        "Refits: stopped at 57 of 200 after 3.0 s. The work was interrupted and its result is not kept; run it again for one.",
+        "Refits: stopped at 57 of 200 after 3.0 s. The calculation was interrupted and has no result. Run it again.",
     }),
   );
   expect(lines).toEqual(["Refits: stopped at 57 of 200 after 3.0 s."]);
@@ -112,7 +112,7 @@ describe("in a notebook", () => {
     expect(calls[1]?.text).toBe("");
   });
 
-  test("the kernel's interrupt reaches the work", () => {
+  test("an interrupt of the kernel stops the work", () => {
     offered[interrupt] = () => true;
     expect(() => withProgress("Refits", 2, ({ advance }) => advance())).toThrowError(
       /^Refits: stopped at 1 of 2/,
@@ -120,7 +120,7 @@ describe("in a notebook", () => {
   });
 });
 
-test("withProgress gives back what the work gives, now or later", async () => {
+test("withProgress returns the value or promise of the work", async () => {
   expect(withProgress("Sum", 1, () => 7)).toBe(7);
   await expect(withProgress("Sum", 1, async () => 8)).resolves.toBe(8);
 });

@@ -40,7 +40,7 @@ describe("Carlson's yeast record", () => {
   const logistic = fit(recurrence("N[t+1] = A/(1 + exp((m - t)/s))"), ledByOne(), { errors: "process" });
   const three = ["A", "m", "s"];
 
-  test("Y1: the three-parameter logistic by its three parameters", () => {
+  test("three-parameter logistic curve: estimates, standard errors, RSS and AIC (R nls)", () => {
     const coefficients = [663.0219894, 7.80768758, 1.828171163];
     const errors = [1.702728685, 0.02233745391, 0.01865843903];
     three.forEach((name, i) => {
@@ -53,7 +53,7 @@ describe("Carlson's yeast record", () => {
     expect(off(group(logistic).criteria!.aic, 106.0964689)).toBeLessThan(1e-6);
   });
 
-  test("Y1: the same through leastSquares, without a Jacobian", () => {
+  test("three-parameter logistic curve through leastSquares, without a Jacobian (R nls)", () => {
     const solved = leastSquares({
       residuals: ([A, m, s]) => Float64Array.from(yeast, (y, t) => y - A! / (1 + Math.exp((m! - t) / s!))),
       start: [600, 8, 2],
@@ -66,7 +66,7 @@ describe("Carlson's yeast record", () => {
     });
   });
 
-  test("Y12 and Y13: profile intervals by the F cut, and Wald intervals by t", () => {
+  test("profile intervals by the F cut-off and Wald intervals by t (R)", () => {
     const profiles = [
       [659.4175335, 666.6682845],
       [7.76040337, 7.855261482],
@@ -95,7 +95,7 @@ describe("Carlson's yeast record", () => {
     expect(
       off(named(stepped, "N[0]").value, value("A") / (1 + Math.exp(value("m") / value("s")))),
     ).toBeLessThan(1e-8);
-    // Y1 prints r and N0 to seven or eight digits.
+    // R prints r and N0 to seven or eight digits.
     expect(off(Math.log(named(stepped, "R").value), 0.5469947)).toBeLessThan(1e-6);
     expect(off(named(stepped, "N[0]").value, 9.1355167)).toBeLessThan(1e-6);
     expect(off(named(stepped, "K").profile.lower, 659.4175335)).toBeLessThan(1e-6);
@@ -103,7 +103,7 @@ describe("Carlson's yeast record", () => {
     expect(off(group(stepped).sumOfSquares, 194.3253782)).toBeLessThan(1e-6);
   });
 
-  test("Y2 and Y3: the Gompertz curve and the exponential, which fit worse", () => {
+  test("Gompertz and exponential curves, which fit worse (R nls)", () => {
     const curve = leastSquares({
       residuals: ([K, b, r]) => yeast.map((y, t) => y - K! * Math.exp(-b! * Math.exp(-r! * t))),
       start: [600, 8, 0.4],
@@ -119,7 +119,7 @@ describe("Carlson's yeast record", () => {
     expect(off(group(growth).criteria!.aic, 239.5435836)).toBeLessThan(1e-6);
   });
 
-  test("Y6: log ratio on level", () => {
+  test("regression of the log ratio on the level (R lm)", () => {
     const line = fit(recurrence("N[t+1] = N*exp(a + b*N)"), record(), {
       errors: "process",
       distribution: "lognormal",
@@ -130,7 +130,7 @@ describe("Carlson's yeast record", () => {
     expect(off(-named(line, "a").value / named(line, "b").value, 649.6249136)).toBeLessThan(1e-6);
   });
 
-  test("Y5: change on level without intercept, and the capacity with its delta-method error", () => {
+  test("regression of the change on the level without intercept, and the capacity with its delta-method error (R lm)", () => {
     const line = fit(recurrence("ΔN = r*N + s*N^2"), record(), { errors: "process" });
     expect(off(named(line, "r").value, 0.5576851103)).toBeLessThan(1e-6);
     expect(off(named(line, "r").standardError, 0.02193648142)).toBeLessThan(1e-5);
@@ -142,7 +142,7 @@ describe("Carlson's yeast record", () => {
     expect(off(named(curve, "K").standardError, 5.401410159)).toBeLessThan(1e-5);
   });
 
-  test("Y8: the Beverton-Holt rule from each value to the next", () => {
+  test("one-step fit of the Beverton-Holt rule (R nls)", () => {
     const stepped = fit(sheltered, record(), { errors: "process" });
     expect(off(named(stepped, "R").value, 1.730513509)).toBeLessThan(1e-6);
     expect(off(named(stepped, "R").standardError, 0.02308134757)).toBeLessThan(1e-5);
@@ -151,7 +151,7 @@ describe("Carlson's yeast record", () => {
     expect(off(group(stepped).sumOfSquares, 318.6343783)).toBeLessThan(1e-6);
   });
 
-  test("Y10: the trajectory of the quadratic rule", () => {
+  test("trajectory fit of the discrete logistic (R nls)", () => {
     const stepped = fit(crowding, record(), { errors: "observation" });
     // Printed to seven digits from an optimiser that stopped at 1e-5.
     expect(off(named(stepped, "r").value, 0.5603671)).toBeLessThan(1e-5);
@@ -160,7 +160,7 @@ describe("Carlson's yeast record", () => {
     expect(off(group(stepped).sumOfSquares, 1353.516669)).toBeLessThan(1e-6);
   });
 
-  test("Y14: the forecast at hours 19 and 24, and when 95% and 99% of the capacity are reached", () => {
+  test("forecast at hours 19 and 24, and times at which 95% and 99% of the capacity are reached (closed form)", () => {
     const stepped = fit(sheltered, record(), { errors: "observation" });
     const ahead = forecast(stepped, { periods: 6 });
     const { central } = ahead.groups[0]!.states[0]!;

@@ -157,6 +157,15 @@ describe("a distribution", () => {
     expect(distribution.upperQuantile(0)).toBe(highest);
   });
 
+  // By the leading term of the series: P(x) = (x/k)^k/Gamma(k + 1) near 0, so the value of 1e-200 is below 1e-308.
+  test("gives what no number can hold as 0 or infinite", () => {
+    expect(distributions.gamma(0.1, 1).quantile(1e-200)).toBe(0);
+    expect(distributions.beta(1e-4, 2).quantile(1e-200)).toBe(0);
+    expect(distributions.f(1e-3, 1e-3).upperQuantile(1e-200)).toBe(Number.POSITIVE_INFINITY);
+    expect(distributions.f(1e-3, 1e-3).quantile(1e-200)).toBe(0);
+    expect(distributions.t(1e-3).quantile(1e-200)).toBe(Number.NEGATIVE_INFINITY);
+  });
+
   // By definition: the lowest count with at least the probability; a half falls on 0 of one fair trial exactly.
   test("of counts takes the lowest count that reaches the probability", () => {
     expect(distributions.binomial(1, 0.5).quantile(0.5)).toBe(0);

@@ -12,7 +12,7 @@ function solved(x: readonly number[], y: readonly number[], curve: Curve, start:
   return leastSquares({ residuals: (c) => y.map((value, i) => value - curve(c, x[i]!)), start });
 }
 
-test("G1: optical density by the logarithm of concentration", () => {
+test("DNase run 1: logistic curve in the log concentration (R nls)", () => {
   // R stopped here 1.6e-6 short of the optimum: coefficients to 5e-6.
   const { concentration, density } = readColumns("series/dnase-run-1.csv");
   const found = solved(concentration!.map(Math.log), density!, logistic, [2, 1, 1]);
@@ -25,7 +25,7 @@ test("G1: optical density by the logarithm of concentration", () => {
   near(found.sumOfSquares, 0.00478956897, 1e-6);
 });
 
-test("G2: a chick's weight, whose asymptote is far beyond the record", () => {
+test("ChickWeight chick 1: logistic curve whose asymptote is far beyond the record (R nls)", () => {
   const { day, gram } = readColumns("series/chick-1-weight.csv");
   const found = solved(day!, gram!, logistic, [400, 25, 10]);
   // The optimum is flat: 1e-4.
@@ -45,7 +45,7 @@ test("G2: a chick's weight, whose asymptote is far beyond the record", () => {
   expect(fitted.groups[0]!.warnings.map(({ code }) => code)).toContain("not-determined");
 });
 
-test("G3: circumference of a tree", () => {
+test("Orange tree 3: logistic curve (R nls)", () => {
   const { day, millimetre } = readColumns("series/orange-tree-3.csv");
   const found = solved(day!, millimetre!, logistic, [150, 700, 400]);
   [158.8294388, 734.84211, 400.9548208].forEach((value, i) => {
@@ -57,7 +57,7 @@ test("G3: circumference of a tree", () => {
   near(found.sumOfSquares, 156.6708044, 1e-6);
 });
 
-test("G6: oxygen demand, with the profile of its rate", () => {
+test("BOD: exponential approach, with the profile of its rate (R nls)", () => {
   const { day, demand } = readColumns("series/oxygen-demand.csv");
   const found = solved(day!, demand!, (c, x) => c[0]! * (1 - Math.exp(-c[1]! * x)), [20, 0.5]);
   // Printed from a fit that stopped early: coefficients 1e-5, errors 1e-4.
@@ -83,7 +83,7 @@ test("G6: oxygen demand, with the profile of its rate", () => {
   }
 });
 
-test("G8: reaction velocity by concentration", () => {
+test("Puromycin, treated: Michaelis-Menten curve (R nls)", () => {
   const { concentration, rate } = readColumns("series/puromycin-treated.csv");
   const found = solved(concentration!, rate!, (c, x) => (c[0]! * x) / (c[1]! + x), [200, 0.1]);
   [212.6837072, 0.06412122573].forEach((value, i) => {
@@ -95,7 +95,7 @@ test("G8: reaction velocity by concentration", () => {
   near(found.sumOfSquares, 1195.448814, 1e-6);
 });
 
-test("G9: a century and a half of a population", () => {
+test("uspop 1790 to 1970: logistic curve (R nls)", () => {
   const { period, value } = readColumns("series/us-population.csv");
   const found = solved(period!, value!, logistic, [200, 1900, 30]);
   [315.5446072, 1949.192544, 40.6039045].forEach((expected, i) => {

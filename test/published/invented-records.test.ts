@@ -8,7 +8,7 @@ import { readColumns } from "./read-columns.js";
 const sheltered = recurrence("N[t+1] = R*N/(1 + (R - 1)*N/K)");
 const trajectory = { errors: "observation", distribution: "lognormal" } as const;
 
-describe("a culture read every half hour", () => {
+describe("a culture recorded every half hour", () => {
   const { hours, density } = readColumns("invented/culture-density.csv");
   const until = (hour: number): Observations => {
     const kept = hours!.filter((time) => time <= hour).length;
@@ -18,7 +18,7 @@ describe("a culture read every half hour", () => {
     );
   };
 
-  test("C-2: capacity, rate and first level with their profiles", () => {
+  test("capacity, growth rate and initial level with their profiles (R and SciPy)", () => {
     const fitted = fit(sheltered, until(99), trajectory);
     const [group] = fitted.groups;
     near(named(fitted, "K").value, 1.5199, 5e-5);
@@ -46,7 +46,7 @@ describe("a culture read every half hour", () => {
   test.each([
     [4, 0.494, 0.27],
     [3, 0.399, 0.177],
-  ])("C-3: cut at hour %i, the record does not determine the capacity", (hour, estimate, lower) => {
+  ])("cut at hour %i, the record does not determine the capacity (R and SciPy)", (hour, estimate, lower) => {
     const fitted = fit(sheltered, until(hour), trajectory);
     const capacity = named(fitted, "K");
     expect(Math.abs(capacity.value - estimate)).toBeLessThan(5e-4);
@@ -58,7 +58,7 @@ describe("a culture read every half hour", () => {
   });
 });
 
-describe("C-9: counts that wander and are read with error", () => {
+describe("a Gompertz state-space record with process and observation error", () => {
   const { period, log_count } = readColumns("invented/log-counts.csv");
   const counts = observations(
     { period: period!, count: log_count!.map(Math.exp) },
@@ -66,13 +66,13 @@ describe("C-9: counts that wander and are read with error", () => {
   );
   const rule = recurrence("N[t+1] = exp(a)*N^b");
 
-  test("the one-step slope is drawn towards 0", () => {
+  test("the one-step slope is biased towards 0", () => {
     const naive = fit(rule, counts, { errors: "process", distribution: "lognormal" });
     near(named(naive, "b").value, 0.60457, 1e-5);
     near(named(naive, "b").standardError, 0.1074, 5e-4);
   });
 
-  test("the state-space likelihood, exact on the log scale, with its profile", () => {
+  test("the state-space likelihood, exact on the log scale, with its profile (R)", () => {
     const both = fit(rule, counts, { errors: "both", distribution: "lognormal" });
     const [group] = both.groups;
     near(named(both, "a").value, 0.5706, 1e-4);
@@ -87,7 +87,7 @@ describe("C-9: counts that wander and are read with error", () => {
   });
 });
 
-describe("S-8: sales on days that may have sold out", () => {
+describe("sales censored by sold-out days", () => {
   const sold = [14, 17, 20, 11, 20, 16, 13, 20, 18, 15, 20, 12, 19, 20, 10];
   const out = sold.map((count) => (count === 20 ? 1 : 0));
   const days = observations(
@@ -112,7 +112,7 @@ describe("S-8: sales on days that may have sold out", () => {
   });
 });
 
-test("S-9b: a harvested stock seen through an index of unknown factor", () => {
+test("a harvested stock observed through an index with unknown catchability (R and SciPy)", () => {
   const { year, catch_t, index_kg_per_haul } = readColumns("invented/catch-and-index.csv");
   const survey = observations(
     { year: year!, taken: catch_t!, index: index_kg_per_haul! },
@@ -131,7 +131,7 @@ test("S-9b: a harvested stock seen through an index of unknown factor", () => {
   near(named(fitted, "B[0]").value / named(fitted, "K").value, 0.9406, 1e-4);
   near(named(fitted, "q").value, 0.012647, 5e-5);
   near(Math.sqrt(fitted.groups[0]!.sumOfSquares / fitted.groups[0]!.count), 0.069, 1e-3);
-  // The greatest sustainable yield r K / 4 as a parameter of its own.
+  // The maximum sustainable yield r K / 4 as a parameter.
   const inYield = recurrence("B[t+1] = B + 4*most/K*B*(1 - B/K) - taken", { inputs: ["taken"] });
   const yields = named(fit(inYield, survey, options), "most");
   near(yields.value, 92.85, 6e-5);
@@ -139,7 +139,7 @@ test("S-9b: a harvested stock seen through an index of unknown factor", () => {
   near(yields.profile.upper, 98.72, 6e-5);
 });
 
-test("G-9: growth of known scatter, with the parameter's own error in the predictions", () => {
+test("log-linear growth with known sd: parameter error in the prediction bands (closed form)", () => {
   // 24 increments whose mean is 0.03 exactly, of known standard deviation 0.06.
   const level = Array.from({ length: 25 }, (_, t) => 3 + 0.03 * t + (t % 2 === 0 ? 0 : 0.04));
   const series = observations(

@@ -14,7 +14,7 @@ function yearly(file: string, every = 1, scale: (value: number) => number = (val
 }
 const process = { errors: "process" } as const;
 
-test("D1: change of a population by its level, without intercept", () => {
+test("uspop: change on level without intercept (R lm)", () => {
   const line = fit(recurrence("ΔN = r*N + s*N^2"), yearly("us-population", 10), process);
   near(named(line, "r").value, 0.2312704809, 1e-8);
   near(named(line, "r").standardError, 0.03502430939, 1e-8);
@@ -25,14 +25,14 @@ test("D1: change of a population by its level, without intercept", () => {
   near(named(curve, "K").value, 398.2022841, 1e-8);
 });
 
-test("D3: a population by its own last value has an unstable level", () => {
+test("uspop: AR(1) by least squares, with an unstable fixed point (R lm)", () => {
   const line = fit(recurrence("N[t+1] = c + phi*N"), yearly("us-population", 10), process);
   near(named(line, "c").value, 3.315367989, 1e-8);
   near(named(line, "phi").value, 1.124368219, 1e-8);
   near(named(line, "c").value / (1 - named(line, "phi").value), -26.65767846, 1e-8);
 });
 
-test("D4: a chick's growth from weighing to weighing", () => {
+test("ChickWeight chick 1: growth on weight (R lm)", () => {
   const { day, gram } = readColumns("series/chick-1-weight.csv");
   const even = observations(
     { day: day!.slice(0, 11), gram: gram!.slice(0, 11) },
@@ -44,7 +44,7 @@ test("D4: a chick's growth from weighing to weighing", () => {
   near(line.groups[0]!.sumOfSquares, 73.70869382, 1e-8);
 });
 
-test("D5: the level of a lake by the year before", () => {
+test("LakeHuron: AR(1) by least squares (R lm)", () => {
   const line = fit(recurrence("L[t+1] = c + phi*L"), yearly("lake-huron-level"), process);
   near(named(line, "c").value, 94.71257438, 1e-8);
   near(named(line, "c").standardError, 32.23789848, 1e-8);
@@ -53,7 +53,7 @@ test("D5: the level of a lake by the year before", () => {
   near(line.groups[0]!.sumOfSquares, 49.37654504, 1e-8);
 });
 
-test("D7: trappings by the two years before", () => {
+test("lynx: AR(2) of the logarithm by least squares (R lm)", () => {
   const line = fit(recurrence("L[t+1] = c + a*L + b*L[t-1]"), yearly("lynx-trapped", 1, Math.log10), process);
   const expected = {
     c: [1.057600456, 0.1219111215],
@@ -70,7 +70,7 @@ test("D7: trappings by the two years before", () => {
   near((2 * Math.PI) / Math.acos(a / 2 / Math.sqrt(-b)), 9.773628896, 1e-8);
 });
 
-test("D10: exact likelihood of a first-order autoregression, read without error", () => {
+test("lh: exact likelihood of an AR(1) without observation error (R arima)", () => {
   const { period, value } = readColumns("series/hormone-level.csv");
   const series = observations(
     { reading: period!, value: value! },
@@ -89,7 +89,7 @@ test("D10: exact likelihood of a first-order autoregression, read without error"
   expect(Math.abs(exact.groups[0]!.criteria!.aic - 64.758325)).toBeLessThan(2e-4);
 });
 
-test("T1, T2 and D14: a level that wanders and is read with error", () => {
+test("Nile: local level model, by likelihood and by its MA(1) form (R StructTS and arima)", () => {
   // Durbin and Koopman (2001), Time Series Analysis by State Space Methods, print 1469.1 and 15099.
   const level = fit(recurrence("L[t+1] = L"), yearly("nile-flow"), { errors: "both" });
   const step = named(level, "process error").value ** 2;

@@ -56,6 +56,7 @@ const others = [
   "answer",
   "closeCase",
   "correct",
+  "distributions",
   "expanding",
   "fill",
   "frame",

@@ -10,7 +10,7 @@ const message = (text: string, options?: RecurrenceOptions): string => {
   return "";
 };
 
-test("an unknown name is refused with its place and the nearest names", () => {
+test("an unknown name is an error with its position and the nearest names", () => {
   expect(
     message("x[t+1] = x*(1 + r*(1 - x/capcity))", { parameters: ["r", "capacity"] }),
   ).toMatchInlineSnapshot(`
@@ -21,7 +21,7 @@ test("an unknown name is refused with its place and the nearest names", () => {
   `);
 });
 
-test("a product without its sign is refused with the sign shown", () => {
+test("a product without an operator is an error that shows the operator", () => {
   expect(message("ΔN = r N")).toMatchInlineSnapshot(`
     "An operator is missing between "r" and "N".
         ΔN = r N
@@ -85,7 +85,7 @@ test("what the hints say to write is read", () => {
   expect(message("N[t+1] = R*N_t", { parameters: ["R", "N_t"] })).toBe("");
 });
 
-test("a mistyped function is refused with the nearest ones", () => {
+test("a mistyped function is an error with the nearest names", () => {
   expect(message("N[t+1] = N*epx(r)")).toMatchInlineSnapshot(`
     ""epx" is not a function.
         N[t+1] = N*epx(r)
@@ -94,7 +94,7 @@ test("a mistyped function is refused with the nearest ones", () => {
   `);
 });
 
-test("a wrong number of values is refused with the way to write the call", () => {
+test("a wrong number of arguments is an error with the usage", () => {
   expect(message("N[t+1] = max(N)")).toMatchInlineSnapshot(`
     ""max" takes 2 or more arguments; 1 was given.
         N[t+1] = max(N)
@@ -109,7 +109,7 @@ test("a wrong number of values is refused with the way to write the call", () =>
   `);
 });
 
-test("a value of the future is refused, except the next row's input", () => {
+test("a future value is an error, except an input of the next period", () => {
   expect(message("N[t+1] = N[t+1] + 1")).toMatchInlineSnapshot(`
     ""N[t+1]" is a future value, and cannot be read on the right-hand side.
         N[t+1] = N[t+1] + 1
@@ -131,7 +131,7 @@ test("a value of the future is refused, except the next row's input", () => {
   `);
 });
 
-test("quantities that need each other are refused", () => {
+test("quantities defined by each other are an error", () => {
   expect(message("a = b + 1\nb = a + 1\nN[t+1] = a")).toMatchInlineSnapshot(`
     ""b" is used here but defined on line 2; lines are evaluated from top to bottom.
         a = b + 1
@@ -146,7 +146,7 @@ test("quantities that need each other are refused", () => {
   `);
 });
 
-test("chained comparisons and sorts that do not fit are refused", () => {
+test("chained comparisons, and numbers in place of conditions, are errors", () => {
   expect(message("N[t+1] = if(0 < N < K, N, K)")).toMatchInlineSnapshot(`
     "Comparisons cannot be chained.
         N[t+1] = if(0 < N < K, N, K)
@@ -177,7 +177,7 @@ test("numbers of mathematics are not taken for granted", () => {
   expect(message("N[t+1] = N*e", { parameters: ["e"] })).toBe("");
 });
 
-test("signs of other notations are refused with ours", () => {
+test("operators of other notations are errors with the operator to write", () => {
   expect(message("N[t+1] = N**2")).toMatchInlineSnapshot(`
     ""**" is not part of the rule language.
         N[t+1] = N**2
@@ -210,7 +210,7 @@ test("signs of other notations are refused with ours", () => {
   `);
 });
 
-test("lines that set nothing, or the same thing twice, are refused", () => {
+test("lines that set nothing, or set a name twice, are errors", () => {
   expect(message("r*N*(1 - N/K)")).toMatchInlineSnapshot(`
     "This line does not set anything.
         r*N*(1 - N/K)
@@ -249,7 +249,7 @@ test("lines that set nothing, or the same thing twice, are refused", () => {
   `);
 });
 
-test("texts beyond the limits of length, depth and parts are refused at once", () => {
+test("texts beyond the limits of length, nesting and terms are errors", () => {
   expect(message(`N[t+1] = ${"N + ".repeat(6000)}N`).split("\n")[0]).toMatchInlineSnapshot(
     `"The rule has 24010 characters; the limit is 20000."`,
   );
@@ -267,7 +267,7 @@ test("texts beyond the limits of length, depth and parts are refused at once", (
   );
 });
 
-test("options that speak of other names or give no number are refused", () => {
+test("options with unknown names or values of the wrong kind are errors", () => {
   expect(message("N[t+1] = R*N", { start: { r: 1 } })).toMatchInlineSnapshot(
     `"Option \`start\`: the rule has no parameter "r". It has R. Did you mean "R"?"`,
   );
@@ -279,7 +279,7 @@ test("options that speak of other names or give no number are refused", () => {
   );
 });
 
-test("names one letter apart and names never used are findings, not refusals", () => {
+test("names one letter apart and unused names are findings, not errors", () => {
   const rule = recurrence("ΔN = growth*N*(1 - N/capacity) - grovth*N", { inputs: ["rain"] });
   expect(rule.findings.map(({ code, message }) => `${code}: ${message}`)).toMatchInlineSnapshot(`
     [

@@ -54,7 +54,7 @@ const attacks = [
   "t[t+1] = 1",
 ];
 
-test.each(attacks)("%s is refused", (text) => {
+test.each(attacks)("%s is an error", (text) => {
   expect(() => recurrence(text)).toThrow(expect.objectContaining({ name: "ModelError" }));
 });
 

@@ -15,9 +15,9 @@ afterAll(() => rmSync(folder, { recursive: true, force: true }));
 const at = (name: string): string => join(folder, name);
 const record = { name: "record", table: tableOf({ week: [1, 2], item: ["rope", "tar"] }) };
 
-async function refused(name: string, options?: ReadOptions): Promise<string> {
+async function readError(name: string, options?: ReadOptions): Promise<string> {
   const thrown = await readTable(at(name), options).then(
-    () => ({ code: "nothing refused", message: "" }),
+    () => ({ code: "no error", message: "" }),
     (error: unknown) => error as { code: string; message: string },
   );
   return `${thrown.code}: ${thrown.message.replaceAll(folder, "")}`;
@@ -54,7 +54,7 @@ describe("a wrong file extension", () => {
   test("is rejected when a text file is named as a workbook, Parquet or a database", async () => {
     for (const ending of ["xlsx", "parquet", "duckdb"]) {
       writeFileSync(at(`text.${ending}`), "week,item\n1,rope\n");
-      expect(await refused(`text.${ending}`)).toMatch(
+      expect(await readError(`text.${ending}`)).toMatch(
         /^unreadable-file: Cannot read ".*" as .*: it does not start like a file of this format\./,
       );
     }
@@ -62,11 +62,11 @@ describe("a wrong file extension", () => {
 
   test("that is unknown asks for the format, and a folder is rejected", async () => {
     writeFileSync(at("record.dat"), "week,item\n1,rope\n");
-    expect(await refused("record.dat")).toMatch(
+    expect(await readError("record.dat")).toMatch(
       /^format-unknown: Unknown file extension "\.dat" in ".*"\. Give `format`: "csv", "tsv"/,
     );
     expect(await columns("record.dat", { format: "csv" })).toEqual({ week: [1], item: ["rope"] });
-    expect(await refused("")).toMatch(/^unreadable-file: .* is a folder\./);
+    expect(await readError("")).toMatch(/^unreadable-file: .* is a folder\./);
   });
 });
 
@@ -77,16 +77,16 @@ describe("a broken file", () => {
       await writeTables([long], at(`whole.${ending}`));
       const bytes = readFileSync(at(`whole.${ending}`));
       writeFileSync(at(`cut.${ending}`), bytes.subarray(0, Math.floor(bytes.length / 2)));
-      expect(await refused(`cut.${ending}`)).toMatch(/^(unreadable-file|no-data-rows|table-unclear): /);
+      expect(await readError(`cut.${ending}`)).toMatch(/^(unreadable-file|no-data-rows|table-unclear): /);
     }
     writeFileSync(at("cut.json"), '[{"week": 1}, {"we');
-    expect(await refused("cut.json")).toMatch(/^unreadable-file: Cannot read .* as JSON/);
+    expect(await readError("cut.json")).toMatch(/^unreadable-file: Cannot read .* as JSON/);
   });
 
   test("of JSON that is not a record is rejected", async () => {
     for (const text of ["3", "[1, 2]", '{"a": 1}', '{"a": [1], "b": [1, 2]}']) {
       writeFileSync(at("other.json"), text);
-      expect(await refused("other.json")).toContain(
+      expect(await readError("other.json")).toContain(
         "it contains neither an array of row objects nor columns of equal length",
       );
     }
@@ -169,10 +169,10 @@ describe("a workbook", () => {
 
   test("with several sheets asks for one", async () => {
     await writeTables([record, { ...record, name: "other" }], at("two.xlsx"));
-    expect(await refused("two.xlsx")).toMatch(
+    expect(await readError("two.xlsx")).toMatch(
       /^table-unclear: .* has several tables: "record" and "other"\. Choose one, such as table: "record"\./,
     );
-    expect(await refused("two.xlsx", { table: "third" })).toMatch(/^no-such-table: /);
+    expect(await readError("two.xlsx", { table: "third" })).toMatch(/^no-such-table: /);
     expect(await columns("two.xlsx", { table: "other" })).toEqual({ week: [1, 2], item: ["rope", "tar"] });
   });
 });
@@ -181,7 +181,7 @@ describe("a database file", () => {
   test("keeps its other tables when one is written, and asks for the one to read", async () => {
     await writeTables([record], at("store.duckdb"));
     await writeTables([{ name: "second", table: tableOf({ week: [3] }) }], at("store.duckdb"));
-    expect(await refused("store.duckdb")).toMatch(/^table-unclear: /);
+    expect(await readError("store.duckdb")).toMatch(/^table-unclear: /);
     expect(await columns("store.duckdb", { table: "second" })).toEqual({ week: [3] });
     expect(await columns("store.duckdb", { table: "record" })).toEqual({
       week: [1, 2],

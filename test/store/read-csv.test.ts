@@ -27,9 +27,13 @@ async function columns(content: string | Uint8Array, options?: ReadOptions, endi
   return Object.fromEntries(table.names.map((name, i) => [name, Array.from(table.columns[i]!)]));
 }
 
-async function refused(content: string | Uint8Array, options?: ReadOptions, ending = "csv"): Promise<string> {
+async function readError(
+  content: string | Uint8Array,
+  options?: ReadOptions,
+  ending = "csv",
+): Promise<string> {
   const thrown = await read(content, options, ending).then(
-    () => ({ code: "nothing refused", message: "" }),
+    () => ({ code: "no error", message: "" }),
     (error: unknown) => error as { code: string; message: string },
   );
   return `${thrown.code}: ${thrown.message.replaceAll(folder, "")}`;
@@ -84,10 +88,10 @@ describe("a delimited file", () => {
   });
 
   test("asks for the decimal sign when cells contradict each other or leave it open", async () => {
-    expect(await refused('row;balance\n1;1.234,56\n2;"1,234.56"\n')).toBe(
+    expect(await readError('row;balance\n1;1.234,56\n2;"1,234.56"\n')).toBe(
       'decimal-sign-unclear: Row 2, balance: the decimal sign of "1,234.56" is unclear. Give decimal: "," or decimal: ".".',
     );
-    expect(await refused("row;balance\n1;1.234\n2;5.678\n")).toContain(
+    expect(await readError("row;balance\n1;1.234\n2;5.678\n")).toContain(
       'decimal-sign-unclear: Row 1, balance: the decimal sign of "1.234"',
     );
     expect(await columns("row;balance\n1;1.234\n2;5.678\n", { decimal: "," })).toEqual({
@@ -117,10 +121,10 @@ describe("a delimited file", () => {
       date: ["2025-03-04 09:30", "2025-03-17 14:05"],
       owed: [1, 2],
     });
-    expect(await refused("date,owed\n03/04/2025,1\n04/04/2025,2\n")).toBe(
+    expect(await readError("date,owed\n03/04/2025,1\n04/04/2025,2\n")).toBe(
       'ambiguous-date: Row 1, date: the date "03/04/2025" is ambiguous. Give dates: "day-month-year" or dates: "month-day-year"; dates: "text" leaves the column unchanged.',
     );
-    expect(await refused("date,owed\n13/04/2025,1\n04/14/2025,2\n")).toContain(
+    expect(await readError("date,owed\n13/04/2025,1\n04/14/2025,2\n")).toContain(
       'mixed-dates: Row 2, date: "04/14/2025" is not a date in the order day-month-year',
     );
     expect(await columns("date,owed\n03/04/2025,1\n", { dates: "month-day-year" })).toEqual({
@@ -154,7 +158,7 @@ describe("a delimited file", () => {
       'Column "coils" has numbers, but row 8500 is "x9"; such cells are kept as text.',
     ]);
     const ragged = [...rows.slice(0, 8000), "8000", ...rows.slice(8001)];
-    expect(await refused(`week,coils\n${ragged.join("\n")}\n`)).toMatch(
+    expect(await readError(`week,coils\n${ragged.join("\n")}\n`)).toMatch(
       /^ragged-row: Row 8001 \(line 8002\)/,
     );
     const long = [...rows.slice(0, 8499), "8499,12345678901234567", ...rows.slice(8500)];
@@ -182,7 +186,7 @@ describe("a delimited file", () => {
     expect(await columns(`\ufeff${text}`)).toEqual(expected);
     expect(await columns(Buffer.from(`\ufeff${text}`, "utf16le"))).toEqual(expected);
     expect(await columns(Buffer.from(text, "latin1"), { encoding: "windows-1252" })).toEqual(expected);
-    expect(await refused(Buffer.from(text, "latin1"))).toBe(
+    expect(await readError(Buffer.from(text, "latin1"))).toBe(
       'encoding-unclear: Line 2 of "/record-FILE.csv" is not UTF-8: "été,1". Give `encoding`, such as encoding: "windows-1252", or save the file as UTF-8.'.replace(
         "FILE",
         String(files - 1),
@@ -195,21 +199,23 @@ describe("a delimited file", () => {
       Buffer.from("jour,valeur\nété,1\n", "utf8"),
       Buffer.from("été,2\n", "latin1"),
     ]);
-    expect(await refused(mixed)).toContain("encoding-unclear: Line 3");
+    expect(await readError(mixed)).toContain("encoding-unclear: Line 3");
   });
 
   test("rejects ragged rows, open quotes, missing headers, empty files and unknown delimiters, with the place", async () => {
-    expect(await refused("a,b\n1,2\n3\n")).toMatch(
+    expect(await readError("a,b\n1,2\n3\n")).toMatch(
       /^ragged-row: Row 2 \(line 3\) of ".*" has 1 cell; the header has 2\./,
     );
-    expect(await refused("a,b\n1,2,3\n")).toMatch(/^ragged-row: Row 1 \(line 2\)/);
-    expect(await refused('a,b\n1,"open\n')).toMatch(/^unended-quote: The quoted cell that starts on line 2/);
-    expect(await refused("1,2\n3,4\n")).toMatch(
+    expect(await readError("a,b\n1,2,3\n")).toMatch(/^ragged-row: Row 1 \(line 2\)/);
+    expect(await readError('a,b\n1,"open\n')).toMatch(
+      /^unended-quote: The quoted cell that starts on line 2/,
+    );
+    expect(await readError("1,2\n3,4\n")).toMatch(
       /^header-missing: The first row of ".*" has numbers instead of column names: 1, 2\./,
     );
-    expect(await refused("a,b\n")).toMatch(/^no-data-rows: No data rows were found in /);
-    expect(await refused("")).toMatch(/^no-data-rows: No data rows were found in /);
-    expect(await refused("a,b;c\n1,2;3\n")).toMatch(/^delimiter-unclear: Cannot detect the delimiter of /);
+    expect(await readError("a,b\n")).toMatch(/^no-data-rows: No data rows were found in /);
+    expect(await readError("")).toMatch(/^no-data-rows: No data rows were found in /);
+    expect(await readError("a,b;c\n1,2;3\n")).toMatch(/^delimiter-unclear: Cannot detect the delimiter of /);
     expect(await columns("1,2\n3,4\n", { header: false })).toEqual({
       "column 1": [1, 3],
       "column 2": [2, 4],

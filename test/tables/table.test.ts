@@ -25,7 +25,7 @@ function cells(made: Table): string[][] {
 describe("digits", () => {
   // Source: JCGM 100:2008 (GUM) 7.2.6: at most two significant digits of the standard uncertainty, the estimate
   // rounded to be consistent with it. The values are its examples H.1 and the style of 7.2.2.
-  test("an estimate is rounded where its standard error has its second digit", () => {
+  test("an estimate is rounded to the second digit of its standard error", () => {
     const rows = [
       { name: "m", value: 100.02147, error: 0.00035 },
       { name: "l", value: 50000838, error: 32 },
@@ -40,12 +40,12 @@ describe("digits", () => {
     ]);
   });
 
-  test("without a standard error an estimate shows three digits, and the reason stands in its place", () => {
+  test("without a standard error an estimate has three digits, and the reason is shown", () => {
     const rows = [{ name: "K", value: 1519.93, error: "not determined" }];
     expect(cells(table({ title: "", columns: estimate, rows }))).toEqual([["K", "1,520", "not determined"]]);
   });
 
-  test("a probability shows no more digits than its Monte-Carlo error allows", () => {
+  test("a probability has no more digits than its Monte Carlo error allows", () => {
     const columns: Column[] = [{ key: "p", label: "P", kind: "probability", pairedWith: "mc" }];
     const rows = [
       { p: 0.54432, mc: 0.0011 },
@@ -61,7 +61,7 @@ describe("digits", () => {
     ]);
   });
 
-  test("money is exact at any size and takes the currency that was set", () => {
+  test("money is exact at any size and has the currency of the number format", () => {
     numberFormat({ currency: "EUR" });
     const columns: Column[] = [{ key: "owed", label: "Owed", kind: "money" }];
     // 2^53 + 1 cents is no double; a tie of the printed decimal goes up (1.035 -> 1.04).
@@ -73,20 +73,20 @@ describe("digits", () => {
     expect(text).toContain("103.50");
   });
 
-  test("numbers of one column share their decimals, so that decimal signs line up", () => {
+  test("numbers of one column have the same decimals", () => {
     const columns: Column[] = [{ key: "n", label: "Level", kind: "number" }];
     const rows = [13.9, 18.08, 107, 134.5].map((n) => ({ n }));
     expect(cells(table({ title: "", columns, rows }))).toEqual([["13.9"], ["18.1"], ["107.0"], ["134.5"]]);
   });
 
-  test("the number format is the analyst's, not the machine's", () => {
+  test("the number format does not depend on the machine", () => {
     numberFormat({ decimal: ",", group: "." });
     const columns: Column[] = [{ key: "n", label: "Level", kind: "number", digits: 8 }];
     expect(cells(table({ title: "", columns, rows: [{ n: 1234567.5 }] }))).toEqual([["1.234.567,5"]]);
   });
 });
 
-test("decimal signs of plain numbers stand under each other", () => {
+test("decimal signs of plain numbers are aligned", () => {
   const columns: Column[] = [{ key: "n", label: "Level", kind: "number" }];
   const rows = [0.5, 13.25, -107, 1e-7, 2e6].map((n) => ({ n }));
   const lines = tableText(table({ title: "", columns, rows }))
@@ -98,7 +98,7 @@ test("decimal signs of plain numbers stand under each other", () => {
   expect(new Set(places).size).toBe(1);
 });
 
-test("text lines up in a terminal, wide letters and footnote marks included", () => {
+test("text is aligned in a terminal, with wide characters and footnote marks", () => {
   const made = table({
     title: "Estimates",
     columns: [...estimate, { key: "unit", label: "Unit", kind: "text" }],
@@ -127,7 +127,7 @@ test("text lines up in a terminal, wide letters and footnote marks included", ()
   `);
 });
 
-test("a heading that only says where an interval ends is written in full", () => {
+test("the heading of the second interval limit is written in full", () => {
   const columns: Column[] = [
     { key: "a", label: "Interval 95%, from", unit: "h", kind: "number" },
     { key: "b", label: "to", unit: "h", kind: "number" },
@@ -136,7 +136,7 @@ test("a heading that only says where an interval ends is written in full", () =>
   expect(text).toContain("Interval 95%, from (h)  Interval 95%, to (h)");
 });
 
-test("powers of units are raised, and told apart from a number before them", () => {
+test("powers in units are superscripts, and separated from a number before them", () => {
   const made = table({
     title: "When N reaches 120 10^4 cells/mL",
     columns: [{ key: "a", label: "A", unit: "m^2", kind: "text" }],
@@ -146,7 +146,7 @@ test("powers of units are raised, and told apart from a number before them", () 
   expect(tableText(made)).toContain("A (m²)");
 });
 
-test("rows beyond the limit are counted, and the last ones are shown", () => {
+test("rows beyond the limit are counted, and the last rows are shown", () => {
   const rows = Array.from({ length: 1000 }, (_, n) => ({ n }));
   const text = tableText(
     table({ title: "", columns: [{ key: "n", label: "Week", kind: "integer" }], rows, limit: 8 }),
@@ -160,7 +160,7 @@ test("rows beyond the limit are counted, and the last ones are shown", () => {
   expect(text).toContain("Rows 1 to 6 and 999 to 1,000 of 1,000 are shown.");
 });
 
-test("tab-separated text has every row, full precision, and no tab or line end inside a cell", () => {
+test("tab-separated text has every row, full precision, and no tab or line break inside a cell", () => {
   // Source: IANA media type text/tab-separated-values: fields hold no tabs.
   const made = table({
     title: "",
@@ -178,7 +178,7 @@ test("tab-separated text has every row, full precision, and no tab or line end i
   expect(tabSeparated(made)).toBe("Name of it\tValue (kg)\tOwed\nx y z\t0.3333333333333333\t0.05\n'=1+1\t\t");
 });
 
-test("hostile texts are shown as text in HTML, and act on no terminal", async () => {
+test("hostile texts are escaped in HTML and in a terminal", async () => {
   const hostile = `<img src=x onerror=alert(1)></script><!-- "' & $x$ \u001b[31m\u202eabc`;
   const made = table({
     title: hostile,
@@ -194,7 +194,7 @@ test("hostile texts are shown as text in HTML, and act on no terminal", async ()
   for (const acting of ["\u001b", "\u202e"]) expect(shown?.["text/plain"]).not.toContain(acting);
 });
 
-test("a table shows itself without an enumerable trace, and is frozen", async () => {
+test("a table has a hidden display method, and is frozen", async () => {
   const made = table({ title: "T", columns: [{ key: "n", label: "Week", kind: "integer" }], rows: [] });
   expect(Object.keys(made)).not.toContain("text/html");
   expect(Object.isFrozen(made)).toBe(true);
@@ -220,6 +220,6 @@ test.each([
     () => table({ title: "Levels", columns: [{ key: "n", label: "A", kind: "weight" as never }], rows: [] }),
     "option-wrong",
   ],
-])("a table that cannot be drawn is refused in words", (make, code) => {
+])("an invalid table is rejected", (make, code) => {
   expect(make).toThrowError(expect.objectContaining({ name: "ModelError", code }));
 });

@@ -55,14 +55,14 @@ describe("fixedDecimals", () => {
   });
 });
 
-test("minor units follow the currency: none, two or three digits", () => {
+test("minor units have the decimals of the currency: none, two or three", () => {
   // Source: ISO 4217, minor units: JPY 0, EUR 2, KWD 3.
   expect(minorUnits(1293n, 0)).toBe("1293");
   expect(minorUnits(129346n, 2)).toBe("1293.46");
   expect(minorUnits(5n, 3)).toBe("0.005");
 });
 
-test("decimalsFor leaves the asked significant digits, a rounding up to the next power included", () => {
+test("decimalsFor gives the requested significant digits, also when rounding up to the next power of ten", () => {
   expect(decimalsFor(0.0566, 2)).toBe(3);
   expect(decimalsFor(56.6, 2)).toBe(0);
   expect(decimalsFor(0.996, 2)).toBe(1);

@@ -30,7 +30,7 @@ test("a level is written with the digits that were typed", () => {
   ]);
 });
 
-test("no percentage is made of what is not a number", () => {
+test("a missing share is not written as a percentage", () => {
   expect(percent(Number.NaN)).toBe("not available");
 });
 
@@ -51,7 +51,7 @@ test("decimal signs follow the number format in force", () => {
   expect([percent(0.975), percent(0.1234, 1), pValue(0.031)]).toEqual(["97,5%", "12,3%", "p = 0,03"]);
 });
 
-test("an interval names the ends that it has", () => {
+test("an interval shows the limits that it has", () => {
   expect(interval("0.39", "0.47", "per month")).toBe("0.39 to 0.47 per month");
   expect(interval("39", undefined)).toBe("at least 39");
   expect(interval(undefined, "47", "EUR")).toBe("at most 47 EUR");

@@ -9,21 +9,21 @@ test("a count takes the singular for one thing only", () => {
   expect(plural(2, "trajectory", "trajectories")).toBe("2 trajectories");
 });
 
-test("words in a row are joined by commas and one last word", () => {
+test("a list is joined by commas and a conjunction", () => {
   expect(list([])).toBe("none");
   expect(list(["a"])).toBe("a");
   expect(list(["a", "b"])).toBe("a and b");
   expect(list(["a", "b", "c"], "or")).toBe("a, b or c");
 });
 
-test("a part of a whole is counted, and none and all are said in words", () => {
+test("n of m is counted, with none and all in words", () => {
   expect(nOfM(3, 12, "series", "series")).toBe("3 of 12 series");
   expect(nOfM(0, 12, "row")).toBe("none of the 12 rows");
   expect(nOfM(12, 12, "row")).toBe("all 12 rows");
   expect(nOfM(1, 1, "row")).toBe("1 of 1 row");
 });
 
-test("a sentence begins with a capital, and a name of the record keeps its letters", () => {
+test("a sentence begins with a capital, and a column name keeps its letters", () => {
   expect(capitalizeSentence("the risk is 3%")).toBe("The risk is 3%");
   expect(capitalizeSentence("owed falls to 0", ["owed"])).toBe("The value of owed falls to 0");
   expect(capitalizeSentence("N reaches 40", ["N"])).toBe("N reaches 40");

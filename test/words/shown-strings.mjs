@@ -9,8 +9,9 @@ const shownKeys =
 const mechanical =
   /(^|\.)(split|join|replace|replaceAll|startsWith|endsWith|includes|indexOf|test|run|querySelector|getAttribute|createHash|require|resolve|import)$/;
 
+/** Markup, style sheets, queries, programs, security policies. */
 const markup =
-  /^\s*<|<\/|[{;]\s*$|^\s*[.#]?[\w-]+\{|:\s*#[0-9a-f]{6}|\bSELECT\b|\bFROM\b|linear-gradient|^var |function\s*\(/;
+  /^\s*<|<\/|[{;]\s*$|^\s*[.#]?[\w-]+\{|:\s*#[0-9a-f]{6}|\bSELECT\b|\bFROM\b|\bCAST\(|\bAS (DOUBLE|s\{)|read_csv\(|(font-family|background):|-src '|linear-gradient|^var |^function |function\s*\(/;
 
 const kebabCase = /^[a-z]+(-[a-z]+)*$/;
 const letters = /\p{L}{2}/u;

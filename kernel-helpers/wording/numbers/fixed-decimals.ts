@@ -1,12 +1,12 @@
 /**
- * A number to so many decimals, rounded half away from zero on the shortest decimal that names it.
+ * A number with fixed decimals, rounded half away from zero on its shortest decimal form.
  *
- * Working on that decimal, not on the binary value behind it, gives 1.005 -> "1.01" and 2.675 -> "2.68":
- * what a reader who rounds the printed number by hand expects.
+ * Rounding that form instead of the binary value gives 1.005 -> "1.01" and 2.675 -> "2.68", as a reader who rounds the
+ * printed number by hand expects.
  *
  * @param value - finite.
  * @param decimals - digits after the point; negative rounds to tens, hundreds, ...
- * @param power - the number is first multiplied by ten to this power, exactly (2 turns a share into per cent).
+ * @param power - the number is first multiplied by 10 to this power, exactly (2 turns a share into per cent).
  * @returns plain digits with "-" and "." and no grouping.
  * @example fixedDecimals(1.005, 2); // "1.01"
  */
@@ -14,7 +14,7 @@ export function fixedDecimals(value: number, decimals: number, power: number = 0
   const [mantissa = "0", exponent = "0"] = Math.abs(value).toExponential().split("e");
   const digits = mantissa.replace(".", "");
   const shift = Number(exponent) - (digits.length - 1) + power + decimals;
-  return placed(scaled(BigInt(digits), shift), decimals, value < 0);
+  return withDecimalPoint(scaledAndRounded(BigInt(digits), shift), decimals, value < 0);
 }
 
 /**
@@ -24,11 +24,11 @@ export function fixedDecimals(value: number, decimals: number, power: number = 0
  * @param decimals - digits of the minor unit: 2 for most currencies, 0 or 3 for some.
  */
 export function minorUnits(minor: bigint, decimals: number): string {
-  return placed(minor < 0n ? -minor : minor, decimals, minor < 0n);
+  return withDecimalPoint(minor < 0n ? -minor : minor, decimals, minor < 0n);
 }
 
 /**
- * Decimals that leave so many significant digits of a number.
+ * The number of decimals that shows this many significant digits.
  *
  * @example decimalsFor(0.0566, 2); // 3
  */
@@ -39,13 +39,13 @@ export function decimalsFor(value: number, significant: number): number {
   return significant - 1 - Number(exponent ?? "0");
 }
 
-function scaled(digits: bigint, shift: number): bigint {
+function scaledAndRounded(digits: bigint, shift: number): bigint {
   if (shift >= 0) return digits * 10n ** BigInt(shift);
   const unit = 10n ** BigInt(-shift);
   return (digits + unit / 2n) / unit;
 }
 
-function placed(units: bigint, decimals: number, negative: boolean): string {
+function withDecimalPoint(units: bigint, decimals: number, negative: boolean): string {
   const sign = negative && units !== 0n ? "-" : "";
   if (decimals <= 0) return sign + units.toString() + (units === 0n ? "" : "0".repeat(-decimals));
   const text = units.toString().padStart(decimals + 1, "0");

@@ -1,4 +1,4 @@
-/** How numbers are written: set by the analyst, never taken from the machine. */
+/** How numbers are written; never taken from the settings of the machine. */
 export interface NumberFormat {
   /** Decimal sign: "." or ",". */
   readonly decimal: string;
@@ -14,10 +14,10 @@ const standard: NumberFormat = Object.freeze({ decimal: ".", group: ",", currenc
 let current: NumberFormat = standard;
 
 /**
- * Sets how tables and figures made from now on write their numbers.
+ * Sets how later tables and figures write numbers.
  *
- * @param changes - what is to differ from the format in force; "standard" goes back to the first one.
- * @returns the format now in force.
+ * @param changes - the settings to change; "standard" restores the default format.
+ * @returns the current format.
  * @example numberFormat({ decimal: ",", group: " ", currency: "EUR" });
  */
 export function numberFormat(changes: Partial<NumberFormat> | "standard" = {}): NumberFormat {
@@ -25,7 +25,7 @@ export function numberFormat(changes: Partial<NumberFormat> | "standard" = {}): 
   return current;
 }
 
-/** Plain digits with the signs of a format: "-1234.5" -> "-1.234,5". Digits below ten thousand group too. */
+/** Plain digits in a number format: "-1234.5" -> "-1.234,5". Numbers below ten thousand are grouped too. */
 export function formatDigits(plain: string, format: NumberFormat): string {
   const [whole = "", fraction] = plain.split(".");
   const grouped = format.group === "" ? whole : whole.replace(/\B(?=(\d{3})+$)/g, () => format.group);

@@ -13,9 +13,7 @@ const superscripts: Readonly<Record<string, string>> = {
 };
 
 /**
- * Whole powers of a unit as raised digits: units are read more easily so, and no markup is needed.
- *
- * A number before a power of ten is told apart from it.
+ * Integer powers in a unit as superscript digits, and "×" between a number and a power of ten.
  *
  * @example superscript("120 10^4 cells/mL"); // "120 × 10⁴ cells/mL"
  */

@@ -12,7 +12,7 @@ import { checkedRange, withUnplanned } from "../setting/setting-range.js";
 import { amount, opened, percentWords, plain, rounded } from "../words/amount.js";
 import { conditionWords } from "../words/record-words.js";
 import { findPeak, type Peak, type PeakSearch, type Place } from "./find-peak.js";
-import { leftWords, signNotes } from "./solve-notes.js";
+import { leftWords, readingNotes } from "./solve-notes.js";
 import { solveWithin } from "./solve-within.js";
 
 /** Options of `optimize`. */
@@ -48,6 +48,8 @@ export interface Optimum {
   readonly left: number;
   /** Whether the best lies on an end of the range, so that a wider one might hold a better. */
   readonly atEnd: boolean;
+  /** Settings between which the measure is the same, its best, and `value` is the near end; undefined where one is best. */
+  readonly plateau: { readonly from: number; readonly to: number } | undefined;
   /** Settings between which the measure stays within 1% and within 5% of its best. */
   readonly flatness: readonly { readonly within: number; readonly from: number; readonly to: number }[];
   /** Of the best setting, from the uncertainty of a fit's parameters. */
@@ -92,9 +94,11 @@ export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum
   const reader = measureReader(context, measure);
   const { height, known } = heights(reader, setting, sign);
   const search = { ...(reader.simulated ? simulatedSearch : exactSearch), multiple };
-  const peak = findPeak(height, range[0], range[1], search);
-  if (peak.looked.length > 1 && peak.looked.every((at) => at.height === peak.height))
+  const found = findPeak(height, range[0], range[1], search);
+  if (found.looked.length > 1 && found.looked.every((at) => at.height === found.height))
     throw noEffectError(vary, measureWords(measure, context));
+  const plateau = plateauOf(height, found, search);
+  const peak = plateau === undefined ? found : { ...found, at: nearEnd(plateau, found), atEnd: false };
   const best = reader.read({ setting, value: peak.at });
   const stepped = reader.simulated || multiple !== undefined;
   const answer = {
@@ -108,14 +112,17 @@ export function optimize(subject: Fit | Rule, options: OptimizeOptions): Optimum
     achievedError: best.error,
     left: best.left,
     atEnd: peak.atEnd,
+    plateau,
     flatness: [0.01, 0.05].map((within) =>
       stepped ? flatAmong(known(), peak, within) : flatWithin(height, peak, within, range),
     ),
-    ...peakMargin(context, measure, setting, sign, peak.looked, level),
+    ...(plateau === undefined
+      ? peakMargin(context, measure, setting, sign, peak.looked, level)
+      : { lower: undefined, upper: undefined }),
     level,
     curve: peak.looked.map((at) => ({ value: at.at, measure: sign * at.height })),
   };
-  const notes = signNotes(context, setting, answer.value, measure, best);
+  const notes = readingNotes(context, setting, answer.value, measure, best);
   const sentence = [bestSentence(answer, measure, sign, context), ...notes].join(" ");
   return { kind: "optimum", ...answer, sentence };
 }
@@ -138,6 +145,33 @@ function heights(reader: MeasureReader, setting: Setting, sign: number): Heights
     },
     known: () => [...found].map(([at, height]) => ({ at, height })).sort((a, b) => a.at - b.at),
   };
+}
+
+/** The stretch of neighbouring places with the height of the peak, its ends refined; undefined where it has no equal. */
+function plateauOf(
+  height: Heights["height"],
+  peak: Peak,
+  { tolerance, multiple }: PeakSearch,
+): Optimum["plateau"] {
+  const { looked } = peak;
+  const level = looked.map((at) => at.height === peak.height);
+  const first = level.indexOf(true);
+  const next = level.indexOf(false, first);
+  const last = (next < 0 ? level.length : next) - 1;
+  if (first < 0 || last === first) return undefined;
+  const end = (inside: number, outside: number): number => {
+    const [from, to] = [looked[inside]!.at, looked[outside]?.at];
+    if (to === undefined) return from;
+    const below = (at: number): number => (height(at) < peak.height ? 1 : 0);
+    const sought = { looks: 2, edge: true, tolerance, multiple };
+    return solveWithin(below, Math.min(from, to), Math.max(from, to), sought).roots[0]?.at ?? from;
+  };
+  return { from: end(first, first - 1), to: end(last, last + 1) };
+}
+
+/** The end of a plateau from which on the rest of the range is the same; the lower one where it lies within the range. */
+function nearEnd({ from, to }: NonNullable<Optimum["plateau"]>, { looked }: Peak): number {
+  return from === looked[0]!.at ? to : from;
 }
 
 const floorOf = (peak: Place, within: number): number => peak.height - within * Math.abs(peak.height);
@@ -212,20 +246,36 @@ function bestSentence(
   sign: number,
   context: DecisionContext,
 ): string {
-  const { vary, unit, value, lower, upper, level, range: between, atEnd, achieved, achievedError } = answer;
+  const { vary, unit, value, lower, upper, level, achieved, achievedError } = answer;
   const spread = lower === undefined || upper === undefined ? undefined : (upper - lower) / 4;
   const margin =
     spread === undefined || !(spread > 0)
       ? ""
       : ` (${percentWords(level)} interval ${rounded(lower!, spread)} to ${rounded(upper!, spread)})`;
-  const [narrow] = answer.flatness;
-  const flat = `within 1% of that from ${plain(narrow!.from, 3)} to ${amount(plain(narrow!.to, 3), unit)}`;
-  const end = atEnd
-    ? `; that is an end of the range ${plain(between[0], 4)} to ${plain(between[1], 4)}, so a wider range may hold a better one`
-    : "";
   const hold = conditionWords(context.rule, context.fit);
   const error =
     achievedError > 0 ? ` (Monte-Carlo error ${errorWords(measure, achievedError, context)})` : "";
   const best = `${measuredWords(measure, achieved, achievedError, context)}${error}`;
-  return `${opened(answer.measure)} is ${sign > 0 ? "largest" : "smallest"}, ${best}, with ${vary} at ${amount(rounded(value, spread), unit)}${margin}, and ${flat}${end}, provided ${hold}.${leftWords(answer.left, context.paths)}`;
+  return `${opened(answer.measure)} is ${sign > 0 ? "largest" : "smallest"}, ${best}, with ${vary} at ${amount(answer.plateau === undefined ? rounded(value, spread) : plain(value, 6), unit)}${margin}, and ${flatWords(answer)}, provided ${hold}.${leftWords(answer.left, context.paths)}`;
+}
+
+/** How far the setting may be off, and whether the range ends there. */
+function flatWords({
+  value,
+  unit,
+  plateau,
+  range,
+  atEnd,
+  flatness,
+}: Omit<Optimum, "kind" | "sentence">): string {
+  if (plateau !== undefined) {
+    const far = plateau.from === value ? plateau.to : plateau.from;
+    const end = range.includes(far) ? ", the end of the range" : "";
+    return `the same for every value looked at from there to ${amount(plain(far, 6), unit)}${end}`;
+  }
+  const [narrow] = flatness;
+  const flat = `within 1% of that from ${plain(narrow!.from, 3)} to ${amount(plain(narrow!.to, 3), unit)}`;
+  return atEnd
+    ? `${flat}; that is an end of the range ${plain(range[0], 4)} to ${plain(range[1], 4)}, so a wider range may hold a better one`
+    : flat;
 }

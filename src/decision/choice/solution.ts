@@ -9,7 +9,10 @@ export interface SettingMargin {
   readonly without: number;
 }
 
-/** What a setting is to bring about: a measure that is a value, at most it, or at least it. */
+/**
+ * What a setting is to bring about: a measure that is a value, at most it, or at least it. A time is in the numbers of
+ * the period column, which on a dated record count from its first period; there a label says it better.
+ */
 export type Target = Measure &
   (
     | { readonly is: number; readonly atMost?: never; readonly atLeast?: never }
@@ -34,8 +37,8 @@ export interface SolveOptions extends DecisionOptions {
   /** Lowest and highest value looked at; default a hundredth to a hundred times the present one, within its bounds. */
   readonly range?: readonly [number, number];
   /**
-   * The setting comes in multiples of this (0.01 for money, 1 for pieces); with `atMost` and `atLeast` only
-   * multiples are tried, and the first that meets the target is given, with `is` the nearest multiple.
+   * The value comes in multiples of this (0.01 for money, 1 for pieces); with `atMost` and `atLeast` only
+   * they are tried, with `is` the nearest is given.
    */
   readonly multiple?: number;
   /** Confidence level of the interval, between 0 and 1; default 0.95. */
@@ -52,7 +55,7 @@ export interface Tried {
 export interface Solution extends Tried {
   /** Rounded to the multiple asked for. */
   readonly value: number;
-  /** Before it was rounded. */
+  /** Before it was rounded to a multiple: where the target begins to be met. */
   readonly exact: number;
   /** The measure at `value`, with its Monte-Carlo error where it is simulated. */
   readonly achieved: number;
@@ -61,7 +64,7 @@ export interface Solution extends Tried {
   readonly left: number;
   /** Which side of the setting meets an `atMost` or `atLeast`. */
   readonly meets: "this value only" | "this value and above" | "this value and below";
-  /** From the uncertainty of a fit's parameters; absent for a rule, and where the measure is a probability, which carries it. */
+  /** Of the setting before rounding, from the uncertainty of a fit's parameters; absent for a rule, and where the measure is a probability, which carries it. */
   readonly margin: SettingMargin | undefined;
 }
 

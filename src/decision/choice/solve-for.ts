@@ -5,6 +5,7 @@ import {
   noRangeError,
   noTargetError,
   pastAlreadyError,
+  pastTimeError,
   probabilityTargetError,
 } from "../errors.js";
 import { isProbability } from "../measure/measure.js";
@@ -16,7 +17,7 @@ import { settingMargin } from "../setting/setting-margin.js";
 import { checkedRange, withUnplanned } from "../setting/setting-range.js";
 import { opened } from "../words/amount.js";
 import type { DatedTarget, Jump, Solution, Solved, SolveOptions, Target } from "./solution.js";
-import { pastAlready, signNotes } from "./solve-notes.js";
+import { pastAlready, readingNotes, stillNotes } from "./solve-notes.js";
 import { solveSentence } from "./solve-sentence.js";
 import { type Crossing, onMultiple, type Roots, solveWithin } from "./solve-within.js";
 
@@ -35,7 +36,7 @@ const simulatedTolerance = 1e-5;
  *
  * @param options.vary - its unit is that of the parameter, state or input.
  * @throws {ModelError} `no-such-setting` | `no-effect` | `past-already` | `probability-outside` | `no-range` | `range-contradicts` | `no-target` |
- *   `future-input-missing` | `outside-projection` | `unknown-name`.
+ *   `time-past` | `future-input-missing` | `outside-projection` | `unknown-name`.
  * @example
  * const loan = recurrence("owed[t+1] = owed*(1 + i) - payment", { fixed: { i: 0.01 } });
  * const asked = solveFor(loan, { vary: "payment", parameters: { payment: 100 }, initial: { owed: 1000 }, periods: 12,
@@ -49,13 +50,14 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
   const until = numericTarget(options.until, context);
   const aim = aimOf(until);
   const setting = settingOf(context, vary);
+  refusePast(until, context, setting);
   const range = given ?? rangeOf(setting);
   const reader = measureReader(context, until);
   const search = searchOf(reader, setting, until, aim);
   const roots = solveWithin(search.excess, range[0], range[1], {
     edge: until.is === undefined,
     multiple: until.is === undefined ? multiple : undefined,
-    ...(reader.simulated && { looks: simulatedLooks, tolerance: simulatedTolerance, slack: search.slack }),
+    ...(reader.simulated && { looks: simulatedLooks, tolerance: search.tolerance, slack: search.slack }),
   });
   const everywhere = measuredWhereAllMeet(roots, aim, until);
   const past = pastAlready(context, until, setting);
@@ -83,9 +85,9 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
   const sentence = [
     solveSentence(answer, context),
     ...(past === undefined ? [] : [`${opened(past)}.`]),
-    ...solutions
-      .slice(0, 1)
-      .flatMap(({ value }) => signNotes(context, setting, value, until, search.read(value))),
+    ...(solutions[0] === undefined
+      ? stillNotes(context, until, search.read(roots.nearest))
+      : readingNotes(context, setting, solutions[0].value, until, search.read(solutions[0].value))),
   ].join(" ");
   return { kind: "solution", ...answer, sentence };
 }
@@ -95,6 +97,28 @@ function numericTarget(target: Target | DatedTarget, { timeOf }: DecisionContext
   const key = (["is", "atMost", "atLeast"] as const).find((each) => typeof target[each] === "string");
   // Of the keys of a target only one is set.
   return key === undefined ? (target as Target) : ({ ...target, [key]: timeOf(target[key]!) } as Target);
+}
+
+/** Refuses a time before the present, from which on a setting holds; a first value holds from the start. */
+function refusePast(
+  target: Target,
+  { ground, timeAt, timeWords, axis }: DecisionContext,
+  setting: Setting,
+): void {
+  const aim = aimOf(target);
+  const { present, periods } = ground;
+  if (!("time" in target) || setting.role === "initial" || aim >= timeAt(present)) return;
+  const key = (["is", "atMost", "atLeast"] as const).find((each) => target[each] !== undefined)!;
+  const typed = (row: number): string =>
+    axis.counts === "numbers" ? `${timeAt(row)}` : JSON.stringify(timeWords(timeAt(row)));
+  throw pastTimeError(key, aim, {
+    asked: timeWords(aim),
+    present: timeWords(timeAt(present)),
+    first: timeWords(timeAt(present + 1)),
+    last: timeWords(timeAt(periods)),
+    ahead: Number.isInteger(aim) && aim >= 1 && aim <= periods - present ? typed(present + aim) : undefined,
+    example: typed(periods),
+  });
 }
 
 /** The value asked for; of a probability between 0 and 1. */
@@ -112,6 +136,8 @@ interface Search {
   readonly excess: (value: number) => number;
   /** Twice the Monte-Carlo error. */
   readonly slack: (value: number) => number;
+  /** Relative width at which a search ends. */
+  readonly tolerance: number;
 }
 
 function searchOf(reader: MeasureReader, setting: Setting, target: Target, aim: number): Search {
@@ -125,6 +151,7 @@ function searchOf(reader: MeasureReader, setting: Setting, target: Target, aim: 
     read,
     excess: (value) => sidedExcess(target, read(value).value - aim),
     slack: (value) => 2 * read(value).error,
+    tolerance: reader.simulated ? simulatedTolerance : 0,
   };
 }
 
@@ -160,22 +187,30 @@ function solutionAt(
   setting: Setting,
   target: Target,
   root: Crossing,
-  { excess, read }: Search,
+  search: Search,
   { level = 0.95, multiple }: SolveOptions,
 ): Solution {
+  const { excess, read } = search;
   const sided = target.is === undefined;
   const above = sided && (root.at === root.below ? excess(root.above) <= 0 : true);
   const value = sided ? root.at : onMultiple(root.at, multiple);
+  const exact = sided && multiple !== undefined ? unrounded(root, search) : root.at;
   const { value: achieved, error: achievedError, left } = read(value);
   return {
     value,
-    exact: root.at,
+    exact,
     achieved,
     achievedError,
     left,
     meets: sided ? (above ? "this value and above" : "this value and below") : "this value only",
-    margin: settingMargin(context, setting, target, root.at, level),
+    margin: settingMargin(context, setting, target, exact, level),
   };
+}
+
+/** Where a target begins to be met between the multiples on either side. */
+function unrounded({ at, below, above }: Crossing, { excess, tolerance }: Search): number {
+  if (below === above) return at;
+  return solveWithin(excess, below, above, { looks: 2, edge: true, tolerance }).roots[0]?.at ?? at;
 }
 
 function jumpAt({ below, above }: Crossing, { read }: Search): Jump {

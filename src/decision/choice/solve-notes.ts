@@ -6,11 +6,11 @@ import {
   recordedSignWarnings,
 } from "../../projection/index.js";
 import { isOfLevel, type Measure, measureOf } from "../measure/measure.js";
-import { levelWords } from "../measure/measure-words.js";
+import { levelWords, measureWords } from "../measure/measure-words.js";
 import type { Reading } from "../measure/read-measure.js";
 import type { DecisionContext } from "../setting/decision-context.js";
 import { groundAt, type Setting } from "../setting/set-value.js";
-import { amount, percent, plain } from "../words/amount.js";
+import { amount, opened, percent, plain } from "../words/amount.js";
 
 /** What is past its level at the present already, as a clause; undefined where nothing is, or the start itself is sought. */
 export function pastAlready(context: DecisionContext, target: Measure, setting: Setting): string | undefined {
@@ -25,12 +25,41 @@ export function pastAlready(context: DecisionContext, target: Measure, setting: 
   return `${name} ${begins} at ${amount(plain(now, 4), context.unitOf(name))}, already at or ${sign < 0 ? "below" : "above"} ${levelWords(target, name, context)}`;
 }
 
+/** What a reader of an answer must know besides: that chance has no part in it, and what the rule does below zero. */
+export function readingNotes(
+  context: DecisionContext,
+  setting: Setting,
+  value: number,
+  measure: Measure,
+  reading: Pick<Reading, "value" | "error">,
+): string[] {
+  return [...stillNotes(context, measure, reading), ...signNotes(context, setting, value, measure, reading)];
+}
+
+/** Where the rule has random change: that a measure is the same on every path, and for a quantity why. */
+export function stillNotes(
+  context: DecisionContext,
+  measure: Measure,
+  { value, error }: Pick<Reading, "value" | "error">,
+): string[] {
+  const { kind, name } = measureOf(measure);
+  if (!context.random || error > 0 || !Number.isFinite(value)) return [];
+  // A share, a time or a quantile may come out the same by chance.
+  const mayAgree = isOfLevel(measure) || ("quantile" in measure && measure.quantile !== undefined);
+  if (kind === "parameter" || mayAgree) return [];
+  const same = `${opened(measureWords(measure, context))} is the same on every path, so it does not depend on chance there`;
+  if (context.rule.states.includes(name)) return [`${same}.`];
+  return [
+    `${same}: a quantity of period k is worked out from the states at the end of period k-1, before the chance of period k.`,
+  ];
+}
+
 /**
  * For a fit: what the rule does below zero with a setting at a value, as far as a measure is read from there.
  *
  * @param reading - the measure there; what lies below zero by less than two of its errors is chance.
  */
-export function signNotes(
+function signNotes(
   context: DecisionContext,
   setting: Setting,
   value: number,

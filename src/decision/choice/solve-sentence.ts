@@ -80,7 +80,8 @@ function settingWords(solution: Solution, { unit, level, multiple }: Question): 
   const digits = multiple === undefined ? limitWords(solution, spread) : plain(value, 12);
   const said = `${side[solution.meets]} ${amount(digits, unit)}`;
   if (spread === undefined || margin === undefined) return said;
-  return `${said} (${percentWords(level)} interval ${rounded(margin.lower!, spread)} to ${rounded(margin.upper!, spread)})`;
+  const before = multiple === undefined ? "" : `before rounding ${rounded(solution.exact, spread)}, `;
+  return `${said} (${before}${percentWords(level)} interval ${rounded(margin.lower!, spread)} to ${rounded(margin.upper!, spread)})`;
 }
 
 /** A limit rounded to the side that meets the target. */

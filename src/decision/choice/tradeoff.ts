@@ -8,7 +8,7 @@ import { type DecisionContext, type DecisionOptions, decisionContext } from "../
 import { settingOf } from "../setting/set-value.js";
 import { withUnplanned } from "../setting/setting-range.js";
 import { amount, plain } from "../words/amount.js";
-import { leftWords, signNotes } from "./solve-notes.js";
+import { leftWords, readingNotes } from "./solve-notes.js";
 
 /** Options of `tradeoff`. */
 export interface TradeoffOptions extends DecisionOptions {
@@ -91,7 +91,7 @@ export function tradeoff(subject: Fit | Rule, options: TradeoffOptions): Tradeof
   const unit = context.unitOf(vary);
   const notes = [rows[0]!, rows[rows.length - 1]!].flatMap((row) =>
     Object.entries(answers).flatMap(([shown, measure]) =>
-      signNotes(context, setting, row.value, measure, {
+      readingNotes(context, setting, row.value, measure, {
         value: row.answers[shown]!,
         error: row.errors[shown]!,
       }),

@@ -21,6 +21,10 @@ interface Quantile {
  * period column. `probability`: the chance that it is reached within the window. `parameter`: a parameter of the rule
  * itself.
  *
+ * A quantity belongs to the step that ends at its period: that of period k is worked out from the states at the end of
+ * period k-1, while a state of period k is its value at the end of that period. So a cost that random demand of period 1
+ * brings about is in the quantity of period 2.
+ *
  * Where chance has a part, a measure is its mean over the paths (a time its median), or the `quantile` asked for.
  */
 export type Measure =

@@ -32,7 +32,8 @@ export interface MeasureReader {
 export function measureReader(context: DecisionContext, asked: Measure): MeasureReader {
   const measure = placedMeasure(asked, context.rule, context.ground.periods - context.ground.present);
   const { kind, name } = measure;
-  if (kind === "probability" && context.fit === undefined && !context.random) throw noChanceError(name);
+  if (kind === "probability" && context.fit === undefined && !context.random)
+    throw noChanceError(name, context.rule.states);
   const drawn = context.fit !== undefined && (kind === "probability" || measure.quantile !== undefined);
   const simulated = kind !== "parameter" && (context.random || drawn);
   const paths = pathReader(context, measure, simulated ? "chance" : "estimates");
@@ -43,7 +44,8 @@ export function measureReader(context: DecisionContext, asked: Measure): Measure
 export function readingOf({ kind, quantile: asked }: PlacedMeasure, found: PathValues): Reading {
   const live = found.values.filter((value) => !Number.isNaN(value));
   const { left } = found;
-  if (live.length <= 1) return { value: live[0] ?? Number.NaN, error: 0, left };
+  // The mean of equal numbers may differ from them in the last digit, which is no Monte-Carlo error.
+  if (live.every((value) => value === live[0])) return { value: live[0] ?? Number.NaN, error: 0, left };
   const probability = asked ?? (kind === "time" ? 0.5 : undefined);
   if (probability !== undefined) return { ...quantileOf(live, probability), left };
   const mean = live.reduce((sum, value) => sum + value, 0) / live.length;

@@ -1,10 +1,10 @@
 import { quantile } from "../../numeric/index.js";
 import type { GroupForecast } from "../../projection/index.js";
 
-/** A path that moves by less than this share of itself in its last period has levelled off. */
+/** A path whose moves shrink, and are less than this share of itself in the last period, has levelled off. */
 const still = 1e-3;
 
-/** The level to which a path tends by the end of its forecast, with the limits of the draws there. */
+/** The level to which a path tends by the end of its forecast, with the limits of the paths there. */
 export function levelling(
   group: GroupForecast,
   place: number,
@@ -13,7 +13,10 @@ export function levelling(
   const { central } = group.states[place]!;
   const value = central[central.length - 1]!;
   const before = central[central.length - 2]!;
-  if (!(Math.abs(value - before) <= still * Math.abs(value))) return undefined;
+  const move = Math.abs(value - before);
+  // Near an unstable equilibrium moves are small as well, but they grow.
+  const shrinks = move === 0 || move < Math.abs(before - central[central.length - 3]!);
+  if (!(shrinks && move <= still * Math.abs(value))) return undefined;
   const draws = group.ensemble.mean[place];
   if (draws === undefined) return { value, lower: value, upper: value };
   const rows = group.index.length;

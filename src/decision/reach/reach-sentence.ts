@@ -1,8 +1,7 @@
 import { type CrossedLevel, type Forecast, levelSide, type Simulation } from "../../projection/index.js";
-import { labelBetween } from "../../record/index.js";
 import { levelWords } from "../measure/measure-words.js";
 import { amount, opened, percent, percentWords, rounded, shareOfPaths } from "../words/amount.js";
-import { conditionWords, groupWords } from "../words/record-words.js";
+import { conditionWords, firstPeriodLabel, groupWords } from "../words/record-words.js";
 import type { AcrossUnits } from "./across-units.js";
 import type { GroupReach, ReachQuestion } from "./reach.js";
 
@@ -183,7 +182,7 @@ function newUnit(
   const said = (at: number): string =>
     axis.counts === "numbers"
       ? `${periodUnit} ${rounded(at, across.standardDeviation)}`
-      : labelBetween(axis, index[0]!, (at - begin) / axis.step.every);
+      : firstPeriodLabel(axis, index[0]! + (at - begin) / axis.step.every);
   const lower = across.newLower < begin ? "the start" : said(across.newLower);
   const upper = across.newUpper > end ? "beyond the forecast" : said(across.newUpper);
   return `; for a new ${column}, with the scatter between the ${across.count} added, the ${percentWords(level)} interval is ${lower} to ${upper}`;

@@ -32,10 +32,10 @@ export interface GroupReach {
   readonly withinRecord: boolean;
   /** The level as a number, at the estimates. */
   readonly levelAt: number;
-  /** Across draws; a limit is undefined where that share of draws never gets there. */
+  /** Across paths; a limit is undefined where that share of paths never gets there. */
   readonly lower: number | undefined;
   readonly upper: number | undefined;
-  /** Half of the draws get there by then; undefined where fewer do. */
+  /** Half of the paths get there by then; undefined where fewer do. */
   readonly median: number | undefined;
   /** For the mean path alone, by the delta method; where errors are those of readings and all is determined. */
   readonly meanPath: DeltaMargin | undefined;
@@ -47,7 +47,7 @@ export interface GroupReach {
   /** Share of paths that ended outside the range of a state before they got there; part of `never`. */
   readonly left: number;
   readonly paths: number;
-  /** By period that some draw reaches first: its share of draws, and the share that is there by then. */
+  /** By period that some path reaches first: its share of paths, and the share that is there by then. */
   readonly distribution: readonly { readonly time: number; readonly share: number; readonly by: number }[];
   /** Where the path no longer moves at the end of the forecast: the level it tends to, with the band of the level. */
   readonly tendsTo: { readonly value: number; readonly lower: number; readonly upper: number } | undefined;

@@ -17,9 +17,8 @@ export interface NextReadingOptions extends RunHooks {
   /** Periods beyond the record up to which a reading could be taken, and up to which the answer looks. */
   readonly periods: number;
   /**
-   * Periods at which it could be taken, by number or label: a list, or two ends; default every period after
-   * the record, whose own periods are looked at only where they are given here, as for samples that were
-   * kept.
+   * Periods at which it could be taken, by number or label: a list, or two ends; those within the record only
+   * where they are given, as for samples that were kept; default every period after the record.
    */
   readonly values?:
     | readonly (number | string)[]

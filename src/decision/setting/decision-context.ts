@@ -21,11 +21,12 @@ import {
   ruleNoise,
   startNames,
 } from "../../projection/index.js";
-import { indexOf, labelAt, labelBetween, type PeriodAxis } from "../../record/index.js";
+import { indexOf, labelAt, type PeriodAxis } from "../../record/index.js";
 import { compileRule, type ProcessNoise, type Rule } from "../../rule/index.js";
 import { groupError, periodError } from "../errors.js";
 import type { MeasureUnits } from "../measure/measure-words.js";
 import { withinError } from "../words/amount.js";
+import { firstPeriodLabel } from "../words/record-words.js";
 
 /** What a decision is worked out from, beside the rule or fit itself. */
 export interface DecisionOptions extends StartOptions, RunHooks {
@@ -41,7 +42,7 @@ export interface DecisionOptions extends StartOptions, RunHooks {
   readonly initial?: InitialValues;
   /** Of a rule: random change by state; every measure is then one of the paths' distribution. */
   readonly noise?: Readonly<Record<string, Noise | ProcessNoise>>;
-  /** Paths where chance has a part; default 4000. */
+  /** Random paths where chance has a part; default 4000. */
   readonly paths?: number;
   /** Seed of the random numbers, a whole number; default that of the case, else 1. */
   readonly seed?: number;
@@ -178,10 +179,10 @@ function ruleContext(rule: Rule, options: DecisionOptions): OwnContext {
   };
 }
 
-/** A time of the period column in a sentence; `zero` is that of period 0. */
+/** A time of the period column in a sentence, by labels that of the first period at or past it; `zero` is that of period 0. */
 function timeWordsOf(axis: PeriodAxis, zero: number): DecisionContext["timeWords"] {
   if (axis.counts === "numbers") return (time, error = 0) => `${axis.unit} ${withinError(time, error, 5)}`;
-  return (time) => labelBetween(axis, 0, (time - zero) / axis.step.every);
+  return (time) => firstPeriodLabel(axis, (time - zero) / axis.step.every);
 }
 
 function timeReader(axis: PeriodAxis, zero: number): DecisionContext["timeOf"] {

@@ -45,7 +45,7 @@ export function drawReader(
 /**
  * Between which settings the target is met at drawn parameters: at the lower limit it has been met, coming from below,
  * by (1 - level)/2 of the draws, at the upper by all but that many. Every draw has its own history, and then the setting.
- * Undefined for a rule, whose parameters are given, and for a probability, which carries them.
+ * Undefined for a rule, whose parameters are given, and for a probability or a quantile, which carries what is open of them.
  */
 export function settingMargin(
   context: DecisionContext,
@@ -54,7 +54,8 @@ export function settingMargin(
   root: number,
   level: number,
 ): SettingMargin | undefined {
-  if (context.fit === undefined || isProbability(target) || "parameter" in target) return undefined;
+  const carried = isProbability(target) || ("quantile" in target && target.quantile !== undefined);
+  if (context.fit === undefined || carried || "parameter" in target) return undefined;
   const aim = target.is ?? target.atMost ?? target.atLeast ?? 0;
   const read = drawReader(context, target);
   const scale = Math.abs(root) || 1;

@@ -1,11 +1,13 @@
 import { type Fit, problemOf } from "../../estimate/index.js";
 import type { Rule } from "../../rule/index.js";
-import { multipleError, rangeError, unknownSettingError } from "../errors.js";
+import { multipleError, noRangeError, rangeError, unknownSettingError } from "../errors.js";
 import { type DecisionOptions, isFit, stateOf } from "./decision-context.js";
 
 /**
  * Options under which a name can be set, refused where nothing has that name. An input that is to be set needs no plan of
  * its own: it begins at the lower end of its range.
+ *
+ * @throws {ModelError} `no-such-setting` | `no-range`.
  */
 export function withUnplanned<T extends DecisionOptions>(
   subject: Fit | Rule,
@@ -18,7 +20,8 @@ export function withUnplanned<T extends DecisionOptions>(
   const settable = [...rule.parameters, ...rule.states.map((state) => `${state}[0]`), ...rule.inputs];
   if (!settable.includes(name) && !rule.states.includes(stateOf(name)))
     throw unknownSettingError(name, settable);
-  if (between === undefined || inputs[name] !== undefined || !rule.inputs.includes(name)) return options;
+  if (inputs[name] !== undefined || !rule.inputs.includes(name)) return options;
+  if (between === undefined) throw noRangeError(name);
   return { ...options, inputs: { ...inputs, [name]: between[0] } };
 }
 

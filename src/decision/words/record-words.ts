@@ -1,5 +1,5 @@
 import type { Fit } from "../../estimate/index.js";
-import { periodsAfter, periodWords } from "../../record/index.js";
+import { labelAt, type PeriodAxis, periodsAfter, periodWords } from "../../record/index.js";
 import { type Rule, ruleLabel } from "../../rule/index.js";
 
 /** The record that an answer stands on: "the record of 58 values to hour 240". */
@@ -34,6 +34,14 @@ export function conditionWords(rule: Rule, fit: Fit | undefined): string {
   if (fit !== undefined)
     return `${planned}it goes on as in ${recordWords(fit)}${named && `, by the rule${named}`}`;
   return `${planned}the rule${named}${rule.parameters.length === 0 ? " holds" : " and its parameters hold"}`;
+}
+
+/** A difference in periods that a search or a sum leaves is none. */
+const rounding = 1e-6;
+
+/** The label of the first period at or past a place on the axis: a record has no date between its periods. */
+export function firstPeriodLabel(axis: PeriodAxis, place: number): string {
+  return labelAt(axis, Math.ceil(place - rounding));
 }
 
 /** How a group is named: "flask B", or "N" where there is a single one. */

@@ -95,18 +95,22 @@ export function mixedFit(rule: Rule, groups: readonly ObservedGroup[], options: 
   };
 }
 
+/** Times that a group is fitted again with the weights over gaps that follow from its own fit. */
+const settlings = 30;
+
 function member(rule: Rule, group: ObservedGroup, options: FitOptions, penalty: Penalty): Member {
   const own = unknownsOf(rule, options);
   const part = prepared(rule, group, own, options);
   const [start] = startingPoints(rule, group, options, own, part);
   if (start === undefined) throw refuseNoStart(group, rule.text);
   const workspace = squaresWorkspace(own.names.length);
-  const { estimates } = minimiseSquares(part.system, start, {
-    lower: own.lower,
-    upper: own.upper,
-    workspace,
-  });
-  return { group, own, part, system: penalisedSystem(part.system, penalty), workspace, at: estimates };
+  const { lower, upper } = own;
+  let at = start;
+  for (let round = 0; round < settlings; round++) {
+    at = minimiseSquares(part.system, at, { lower, upper, workspace }).estimates;
+    if (part.rows.reweigh?.(at) !== true) break;
+  }
+  return { group, own, part, system: penalisedSystem(part.system, penalty), workspace, at };
 }
 
 function populationUnknowns(own: Unknowns, parameters: number): Unknowns {

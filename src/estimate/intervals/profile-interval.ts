@@ -41,6 +41,8 @@ export function profileInterval(
   spacing: number,
   seeds: readonly Float64Array[] = [],
 ): Profile {
+  const { estimates, variance, separable } = problem;
+  if (variance === 0 && separable[i]) return exactly(estimates[i]!);
   const walk = profileWalk(problem, i, seeds);
   const down = side(walk, problem, i, -1, spacing);
   const up = side(walk, problem, i, 1, spacing);
@@ -53,6 +55,13 @@ export function profileInterval(
     inside: walk.points.filter(({ excess }) => excess < 0).map(({ estimates }) => estimates),
     better: walk.better(),
   };
+}
+
+/** A record without scatter leaves no other value, and so no interval. */
+function exactly(value: number): Profile {
+  const note = "the record does not scatter about the rule";
+  const limits = { lower: undefined, upper: undefined, note, firm: true };
+  return { ...limits, trace: [{ value, increase: 0 }], inside: [], better: undefined };
 }
 
 interface Side {

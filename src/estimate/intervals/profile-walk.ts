@@ -80,7 +80,8 @@ export function profileWalk(
     if (!Number.isFinite(rise))
       return { value, estimates: at, increase: Infinity, excess: Infinity, slope: 0, isHeldBack };
     if (rise < -fall * variance) better = at;
-    const increase = Math.max(0, rise) / variance;
+    // Of a record without scatter any rise is infinite, and none is none.
+    const increase = rise > 0 ? rise / variance : 0;
     const height = Math.sqrt(increase);
     const point = {
       value,

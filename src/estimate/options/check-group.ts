@@ -2,6 +2,7 @@ import { inputByPeriod, type ObservedGroup } from "../../record/index.js";
 import { inputOffsets, type Rule } from "../../rule/index.js";
 import {
   refuseAllCensored,
+  refuseFilteredLimit,
   refuseInputGap,
   refuseMissingInput,
   refuseNoChange,
@@ -28,7 +29,7 @@ export function checkRecorded(rule: Rule, group: ObservedGroup, options: FitOpti
   checkSd(group, options);
   for (const state of rule.states) {
     checkState(group, state, options);
-    checkCensoring(group, state);
+    checkCensoring(group, state, options);
   }
 }
 
@@ -83,9 +84,11 @@ function checkState(group: ObservedGroup, state: string, options: FitOptions): v
   throw refuse(group, group.rows[bad]!, values[bad]!);
 }
 
-function checkCensoring(group: ObservedGroup, state: string): void {
+function checkCensoring(group: ObservedGroup, state: string, { errors }: FitOptions): void {
   const censoring = group.censoring?.[state];
   if (!censoring) return;
+  const marked = censoring.findIndex((mark) => mark !== 0);
+  if (errors === "both" && marked >= 0) throw refuseFilteredLimit(group, state, group.rows[marked]!);
   const sides = new Set(censoring);
   if (sides.has(0) || sides.size > 1) return;
   throw refuseAllCensored(group, state, sides.has(1) ? "above" : "below");

@@ -33,7 +33,7 @@ function errorSentence({ errors }: FitOptions): string {
   if (errors === "observation")
     return "Error in the observation: whole trajectory fitted, initial state estimated unless given.";
   return errors === "process"
-    ? "Error in the process: each step fitted from the recorded value before it, over a gap by as many steps."
+    ? "Error in the process: each step fitted from the recorded value before it; over a gap by as many steps, with the variance that their errors add up to."
     : "Error in both the process and the observation: likelihood of the readings by the Kalman filter.";
 }
 
@@ -42,12 +42,14 @@ function filterSentence({ method, start, check }: NonNullable<GroupFit["filter"]
     method === "exact"
       ? "The filter is exact, the rule being linear on the fitting scale"
       : "The filter takes the rule's slope at the estimated state (extended)";
-  const first =
-    start === "stationary"
-      ? "the first reading is taken from the rule's long-run distribution (stationary start)"
-      : "the first reading is taken as read and left out of the likelihood (diffuse start)";
-  return `${filter}; ${first}.${checkSentence(check)}`;
+  return `${filter}; ${startSentences[start]}.${checkSentence(check)}`;
 }
+
+const startSentences: Readonly<Record<NonNullable<GroupFit["filter"]>["start"], string>> = {
+  stationary: "the first reading is taken from the rule's long-run distribution (stationary start)",
+  diffuse: "the first reading is taken as read and left out of the likelihood (diffuse start)",
+  known: "the first state is known (`initial`), and the first reading is left out of the likelihood",
+};
 
 function checkSentence(check: NonNullable<GroupFit["filter"]>["check"]): string {
   if (check === undefined) return "";

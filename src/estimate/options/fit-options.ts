@@ -36,7 +36,7 @@ export interface FitOptions {
   readonly start?: Readonly<Record<string, number>>;
   /**
    * Initial states that are known exactly, by state (oldest first where the rule reads past values); otherwise a
-   * trajectory fit estimates them.
+   * trajectory fit estimates them; with `errors: "both"` the filter begins there, without error.
    */
   readonly initial?: Readonly<Record<string, number | readonly number[]>>;
   /**

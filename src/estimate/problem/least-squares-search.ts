@@ -23,7 +23,7 @@ export function leastSquaresSearch(rule: Rule, group: ObservedGroup, options: Fi
   const family = errorFamily(options);
   const scale = scaleOf(options);
   const { from, to } = scale;
-  const make = recordMaker(rule, group, unknowns, rows, options);
+  const make = recordMaker(rule, group, rows);
   return {
     kind: "least-squares",
     group,
@@ -37,9 +37,15 @@ export function leastSquaresSearch(rule: Rule, group: ObservedGroup, options: Fi
     measures: (_, value) => ({ criteria: criteria(value, rows, options), sigma: undefined, exact: true }),
     family,
     spreadAt: (_, sigma) => sigma,
+    ...(rows.reweigh && { settle: (at) => settledAt(rows, at) }),
     disturbed: (at, errors) => make(at, (fitted, i) => from(to(fitted) + errors[i]!)),
     draw: (at, sigma, stream) => make(at, (fitted, i) => family.draw(fitted, rows.roots[i]!, sigma, stream)),
   };
+}
+
+function settledAt(rows: FitRows, at: Float64Array): Float64Array {
+  rows.reweigh?.(at);
+  return at;
 }
 
 function partObjective(rows: FitRows): Objective {

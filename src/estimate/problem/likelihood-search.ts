@@ -27,13 +27,13 @@ export function likelihoodSearch(rule: Rule, group: ObservedGroup, options: FitO
   const spreadAt = (at: Float64Array): number => spreadOf(at, unknowns);
   const minusTwice = minusTwiceLogLikelihood(rule, group, rows, unknowns, family);
   const over = (from: number, end: number): Objective =>
-    likelihoodObjective((at) => minusTwice(at, from, end), unknowns);
+    likelihoodObjective((at) => minusTwice(at, from, end), unknowns, rows.reweigh);
   const unchecked = over(0, rows.count);
   const objective = checkedObjective(unchecked);
   const weighted = family.counts && rows.roots.some((root) => root !== 1);
   const censoring = censoringOf(rule, group, rows);
   const drawable = !weighted && censoring.every((mark) => mark === 0);
-  const make = recordMaker(rule, group, unknowns, rows, options);
+  const make = recordMaker(rule, group, rows);
   return {
     kind: "likelihood",
     group,

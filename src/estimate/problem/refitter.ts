@@ -69,7 +69,7 @@ export function refitterOf(
   return {
     unknowns,
     rows,
-    robust: search.settle !== undefined,
+    robust: search.weightsAt !== undefined,
     recorded,
     at,
     reported: (i, value) => (unknowns.rooted[i] ? Math.sqrt(value) : value),

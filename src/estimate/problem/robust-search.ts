@@ -51,6 +51,7 @@ export function robustSearch(rule: Rule, group: ObservedGroup, options: FitOptio
     let at = plain.objective.minimise(from, unknowns.lower, unknowns.upper).estimates;
     for (let round = 0; round < rounds; round++) {
       const before = at;
+      rows.reweigh?.(at);
       scale.sigma = scaleOfResiduals(rows, at);
       at = objective.minimise(at, unknowns.lower, unknowns.upper).estimates;
       if (alike(at, before)) break;

@@ -47,7 +47,10 @@ export interface Search {
   readonly spreadAt: (at: Float64Array, sigma: number) => number;
   /** Of a filter: errors of its predictions over their standard deviations, [values compared]. */
   readonly standardised?: (at: Float64Array) => Float64Array;
-  /** Of a robust fit: finds again the scale in which "far off" is measured, after the record was given other values. */
+  /**
+   * Finds again what weights rest on, after the record was given other values: of a robust fit the scale in which "far
+   * off" is measured, of steps over gaps the rule's slopes.
+   */
   readonly settle?: (from: Float64Array) => Float64Array;
   /** Of a robust fit: how much each value counts, [count], beside its own weight. */
   readonly weightsAt?: (at: Float64Array) => Float64Array;

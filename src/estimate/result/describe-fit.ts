@@ -70,7 +70,9 @@ function initialOf(
   return Object.fromEntries(
     rule.states.map((state, s) => [
       state,
-      options.errors === "observation" ? unknowns.initial[s]! : group.values[state]![first]!,
+      options.errors === "process" || Number.isNaN(unknowns.initial[s]!)
+        ? group.values[state]![first]!
+        : unknowns.initial[s]!,
     ]),
   );
 }

@@ -17,7 +17,10 @@ export interface FitPoint {
   readonly fitted: number;
   /** Observed minus fitted, on the fitting scale. */
   readonly residual: number;
-  /** The record's weight or the number of replicates averaged, over the square of a known standard deviation. */
+  /**
+   * The record's weight or the number of replicates averaged, over the square of a known standard deviation, and over
+   * the variance that the steps of a gap add up to.
+   */
   readonly weight: number;
   /** 0 exact; -1 where the value is only known to lie at or below `observed`, 1 at or above it. */
   readonly censoring: number;

@@ -25,7 +25,7 @@ export function fitWarnings(fit: Omit<GroupFit, "warnings">, context: FitContext
   return [
     ...stopWarning(fit),
     ...undetermined(fit, context),
-    ...spreadsNotSeparated(fit, onLogScale(context.options)),
+    ...spreadsNotSeparated(fit, context.options),
     ...atBounds(fit, context.unknowns),
     ...rivals(fit),
     ...correlationWarnings(fit),
@@ -66,7 +66,7 @@ function undetermined(fit: Omit<GroupFit, "warnings">, { found }: FitContext): W
 }
 
 /** The split of process and observation error, or a dispersion, that the record leaves open. */
-function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">, logScale: boolean): Warning[] {
+function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">, options: FitOptions): Warning[] {
   const loose = fit.estimates.filter((each) => each.role === "scale" && each.standardError === undefined);
   if (loose.length === 0) return [];
   const limits = loose.map(
@@ -77,10 +77,21 @@ function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">, logScale: boolean)
     {
       code: both ? "errors-not-separated" : "not-determined",
       message: both
-        ? `The record separates the two errors only weakly (${limits.join("; ")}). Where the standard deviation of a reading is known, from replicates or a survey's error, give it: \`sd: 0.15\`${logScale ? " on the log scale (a coefficient of variation of 15%)" : ", in the record's unit"}.`
+        ? `The record separates the two errors only weakly (${limits.join("; ")}). ${separationAdvice(fit, options)}`
         : `The record gives no two-sided interval: ${limits.join("; ")}.`,
     },
   ];
+}
+
+/** What parts the two errors better: the standard deviation of a reading, or more of the record where that is given. */
+function separationAdvice({ points }: Omit<GroupFit, "warnings">, options: FitOptions): string {
+  if (options.sd !== undefined)
+    return "Beside the `sd` given, its readings are too few to tell how large the process error is: check `sd`, or add periods to the record.";
+  const size = points.reduce((sum, { observed }) => sum + Math.abs(observed), 0) / points.length;
+  const example = onLogScale(options)
+    ? "`sd: 0.15` on the log scale (a coefficient of variation of 15%)"
+    : `for instance \`sd: ${Number((0.05 * size).toPrecision(1))}\`, in the record's unit (5% of its mean size)`;
+  return `Where the standard deviation of a reading is known, from replicates or a survey's error, give it: ${example}.`;
 }
 
 const shown = (limit: number | undefined, none: string): string => limit?.toPrecision(3) ?? none;

@@ -25,6 +25,12 @@ export function combinedRows(
   const row = new Float64Array(size);
   const joined = (pick: (rows: FitRows) => ArrayLike<number>): number[] =>
     groups.flatMap((rows) => Array.from(pick(rows)));
+  const roots = Float64Array.from(joined((rows) => rows.roots));
+  const reweigh = (at: Float64Array): boolean => {
+    const changed = groups.map((rows, g) => rows.reweigh?.(gather(at, maps[g]!, locals[g]!)) ?? false);
+    roots.set(joined((rows) => rows.roots));
+    return changed.includes(true);
+  };
   let withRows = false;
   let last = 0;
   return {
@@ -35,7 +41,8 @@ export function combinedRows(
     entries: Int32Array.from(joined((rows) => rows.entries)),
     states: Int32Array.from(joined((rows) => rows.states)),
     observed: Float64Array.from(joined((rows) => rows.observed)),
-    roots: Float64Array.from(joined((rows) => rows.roots)),
+    roots,
+    ...(groups.some((rows) => rows.reweigh) && { reweigh }),
     prepare(at, needRows) {
       withRows = needRows;
       groups.forEach((rows, g) => {

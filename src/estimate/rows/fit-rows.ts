@@ -24,4 +24,11 @@ export interface FitRows {
   fitted(): number;
   /** Puts other values [rows of the group, states] in the record's place. */
   take(values: Float64Array): void;
+  /** Of one-step fits: puts one value in the place of compared value i, from which later ones are then stepped to. */
+  readonly put?: (i: number, value: number) => void;
+  /**
+   * Of one-step fits over gaps: gives `roots` the weights that follow from the rule's slopes at the unknowns; says whether
+   * one changed. Before, every step over a gap counts as if its error were carried on as it is.
+   */
+  readonly reweigh?: (unknowns: Float64Array) => boolean;
 }

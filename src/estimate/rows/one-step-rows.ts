@@ -5,9 +5,14 @@ import type { RecordedSteps } from "../systems/one-step-system.js";
 import { slotsOf } from "../unknowns/slots.js";
 import { place, type Unknowns } from "../unknowns/unknowns.js";
 import type { FitRows } from "./fit-rows.js";
+import { gapCovariance } from "./gap-errors.js";
+import { gapWeights } from "./gap-weights.js";
 import { inputsByPeriod } from "./inputs-by-period.js";
 import { recordedPairs } from "./recorded-pairs.js";
+import { steppedCells } from "./stepped-cells.js";
 import { rootWeight, valueTable } from "./value-table.js";
+
+const none = new Float64Array(0);
 
 /** The pairs of a group as rows, and laid out for generated sums where every pair is one step apart. */
 export interface OneStepRows {
@@ -16,8 +21,10 @@ export interface OneStepRows {
 }
 
 /**
- * The rule is started afresh at every recorded value and compared with the next one; over a gap of k periods it is
- * iterated k times. This blames the process: each step has its own error.
+ * The rule is started afresh at every recorded value and compared with the next one. The error lies in the process: each
+ * step has its own. Over a gap of k periods the rule is iterated k times, and the value weighs less as the errors of the
+ * k steps add up; of several values reached from the same row each is compared with what the rule and those before it
+ * lead one to expect.
  */
 export function oneStepRows(
   rule: Rule,
@@ -26,65 +33,89 @@ export function oneStepRows(
   unknowns: Unknowns,
   options: FitOptions,
 ): OneStepRows {
-  const { from, to, spans, sources } = recordedPairs(rule, group);
+  const pairs = recordedPairs(rule, group);
   const slots = slotsOf(rule);
   const slotStates = Int32Array.from(slots, ({ state }) => rule.states.indexOf(state));
   const states = rule.states.length;
-  const width = rule.parameters.length + slots.length;
-  const longest = spans.reduce((most, span) => Math.max(most, span), 1);
-  const path = new Float64Array((longest + 1) * slots.length);
-  const sensitivities = new Float64Array((longest + 1) * slots.length * width);
   const values = valueTable(rule, group);
-  const cells = comparedCells(to, states, values);
-  const entries = Int32Array.from(cells, ({ pair }) => to[pair]!);
-  const cellStates = Int32Array.from(cells, ({ state }) => state);
-  const pairs = Int32Array.from(cells, ({ pair }) => pair);
-  const observed = Float64Array.from(cells, ({ pair, state }) => values[to[pair]! * states + state]!);
-  const roots = Float64Array.from(cells, ({ pair, state }) =>
-    rootWeight(group, rule.states[state]!, to[pair]!, options.sd),
+  const cells = steppedCells(pairs, states, values);
+  const { entries, spans, origins, firsts, longest } = cells;
+  const observed = Float64Array.from(entries, (entry, i) => values[entry * states + cells.states[i]!]!);
+  const roots = Float64Array.from(entries, (entry, i) =>
+    rootWeight(group, rule.states[cells.states[i]!]!, entry, options.sd),
   );
-  const start = new Float64Array(slots.length);
   const { columns, parameters } = unknowns;
   const size = columns.length;
   const row = new Float64Array(size);
   const inputs = inputsByPeriod(rule, group);
   const log = onLogScale(options);
-  let withRows = false;
-  let fitted = 0;
-  let ran = -1;
-  const steps = longest === 1 ? emptySteps(from, group, slots.length, inputs) : undefined;
+  const steps = longest === 1 ? emptySteps(pairs.from, group, slots.length, inputs) : undefined;
   const layOut = (): void => {
     if (steps === undefined) return;
-    for (let k = 0; k < sources.length; k++)
-      steps.from[k] = values[sources[k]! * states + slotStates[k % slots.length]!]!;
+    for (let k = 0; k < pairs.sources.length; k++)
+      steps.from[k] = values[pairs.sources[k]! * states + slotStates[k % slots.length]!]!;
     for (let i = 0; i < observed.length; i++) {
-      const place = pairs[i]! * slots.length + cellStates[i]!;
+      const place = origins[i]! * slots.length + cells.states[i]!;
       steps.weights[place] = roots[i]!;
       steps.observed[place] = log ? Math.log(observed[i]!) : observed[i]!;
     }
   };
   layOut();
-  const run = (pair: number): void => {
-    ran = pair;
+  const start = new Float64Array(slots.length);
+  const begin = (pair: number): number => {
     for (let s = 0; s < start.length; s++)
-      start[s] = values[sources[pair * start.length + s]! * states + slotStates[s]!]!;
-    const period = group.index[from[pair]!]!;
-    if (withRows)
-      compiled.pathWithSensitivities(start, parameters, inputs, period, spans[pair]!, path, sensitivities);
-    else compiled.path(start, parameters, inputs, period, spans[pair]!, path);
+      start[s] = values[pairs.sources[pair * start.length + s]! * states + slotStates[s]!]!;
+    return group.index[pairs.from[pair]!]!;
   };
+  const width = rule.parameters.length + slots.length;
+  const path = new Float64Array((longest + 1) * slots.length);
+  const sensitivities = new Float64Array((longest + 1) * slots.length * width);
+  let withRows = false;
+  let ran = -1;
+  const run = (i: number): void => {
+    ran = origins[i]!;
+    const period = begin(ran);
+    const far = cells.reaches[i]!;
+    if (withRows) compiled.pathWithSensitivities(start, parameters, inputs, period, far, path, sensitivities);
+    else compiled.path(start, parameters, inputs, period, far, path);
+  };
+  /** The error of value i by itself; its derivatives are added to the row, times a share. */
+  const errorOf = (i: number, share: number): number => {
+    const cell = spans[i]! * slots.length + cells.states[i]!;
+    const reached = path[cell]!;
+    if (withRows) {
+      const scale = -share / (log ? reached : 1);
+      for (let a = 0; a < size; a++) row[a] = row[a]! + scale * sensitivities[cell * width + columns[a]!]!;
+    }
+    return log ? Math.log(observed[i]!) - Math.log(reached) : observed[i]! - reached;
+  };
+  const weights = gapWeights(cells, roots, options);
+  /** What the values reached from the same row before value i lead one to expect of its error. */
+  const expectedOf = (i: number): number => {
+    const shares = weights?.shares[i] ?? none;
+    let expected = 0;
+    for (let j = 0; j < shares.length; j++)
+      expected += shares[j]! * errorOf(firsts[i]! + j, -roots[i]! * shares[j]!);
+    return expected;
+  };
+  let fitted = 0;
   const rows: FitRows = {
     size,
-    count: cells.length,
+    count: entries.length,
     row,
     entries,
-    states: cellStates,
+    states: cells.states,
     observed,
     roots,
     take(given) {
       values.set(given);
-      for (let i = 0; i < observed.length; i++) observed[i] = given[entries[i]! * states + cellStates[i]!]!;
+      for (let i = 0; i < observed.length; i++) observed[i] = given[entries[i]! * states + cells.states[i]!]!;
+      ran = -1;
       layOut();
+    },
+    put(i, value) {
+      values[entries[i]! * states + cells.states[i]!] = value;
+      observed[i] = value;
     },
     prepare(at, needRows) {
       place(unknowns, at);
@@ -92,19 +123,25 @@ export function oneStepRows(
       ran = -1;
     },
     residualAt(i) {
-      const pair = pairs[i]!;
-      if (pair !== ran) run(pair);
-      const cell = spans[pair]! * slots.length + cellStates[i]!;
-      fitted = path[cell]!;
-      if (withRows) {
-        const scale = -roots[i]! / (log ? fitted : 1);
-        for (let a = 0; a < size; a++) row[a] = scale * sensitivities[cell * width + columns[a]!]!;
-      }
-      return roots[i]! * (log ? Math.log(observed[i]!) - Math.log(fitted) : observed[i]! - fitted);
+      if (origins[i] !== ran) run(i);
+      row.fill(0);
+      const expected = expectedOf(i);
+      const error = errorOf(i, roots[i]!) - expected;
+      const reached = path[spans[i]! * slots.length + cells.states[i]!]!;
+      fitted = log ? reached * Math.exp(expected) : reached + expected;
+      return roots[i]! * error;
     },
     fitted: () => fitted,
   };
-  return { rows, steps };
+  if (weights === undefined) return { rows, steps };
+  const covarianceOf = gapCovariance(rule, compiled, log);
+  const reweigh = (at: Float64Array): boolean => {
+    place(unknowns, at);
+    return weights.weigh((origin, reached) =>
+      covarianceOf(parameters, inputs, start, begin(origin), reached),
+    );
+  };
+  return { rows: { ...rows, reweigh }, steps };
 }
 
 function emptySteps(
@@ -116,16 +153,4 @@ function emptySteps(
   const table = (): Float64Array => new Float64Array(from.length * slots);
   const periods = from.map((entry) => group.index[entry]!);
   return { inputs, periods, from: table(), observed: table(), weights: table() };
-}
-
-/** The recorded values at the ends of pairs. */
-function comparedCells(
-  to: Int32Array,
-  states: number,
-  values: Float64Array,
-): readonly { readonly pair: number; readonly state: number }[] {
-  return Array.from({ length: to.length * states }, (_, k) => ({
-    pair: Math.floor(k / states),
-    state: k % states,
-  })).filter(({ pair, state }) => !Number.isNaN(values[to[pair]! * states + state]!));
 }

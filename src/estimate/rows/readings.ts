@@ -17,7 +17,7 @@ export interface Readings {
   /** Period at which the filter begins, and how many readings lie there. */
   readonly first: number;
   readonly skipped: number;
-  /** [slots]: the state vector as read where the filter begins, on the fitting scale, and roots of its weights. */
+  /** [slots]: the state vector as read (or known) where the filter begins, on the fitting scale, and roots of its weights. */
   readonly beginning: Float64Array;
   readonly beginningRoots: Float64Array;
   /** [slots]: the number of the state that a slot holds, now or from the past. */
@@ -26,8 +26,17 @@ export interface Readings {
   take(values: Float64Array): void;
 }
 
-/** Orders the readings of a group for a filter. */
-export function readingsOf(rule: Rule, group: ObservedGroup, options: FitOptions): Readings {
+/**
+ * Orders the readings of a group for a filter.
+ *
+ * @param known - [slots], own unit: a state vector without error to begin from, instead of the first readings.
+ */
+export function readingsOf(
+  rule: Rule,
+  group: ObservedGroup,
+  options: FitOptions,
+  known?: Float64Array,
+): Readings {
   const states = rule.states.length;
   const log = onLogScale(options);
   const first = longestLag(rule);
@@ -56,7 +65,7 @@ export function readingsOf(rule: Rule, group: ObservedGroup, options: FitOptions
       values[i] = scaled(observed[i]!);
     });
     slots.forEach(({ entry, state }, s) => {
-      beginning[s] = scaled(given[entry * states + state]!);
+      beginning[s] = scaled(known?.[s] ?? given[entry * states + state]!);
     });
   };
   take(recorded);
@@ -74,7 +83,9 @@ export function readingsOf(rule: Rule, group: ObservedGroup, options: FitOptions
     first,
     skipped: cells.filter(({ entry }) => group.index[entry] === first).length,
     beginning,
-    beginningRoots: Float64Array.from(slots, ({ entry, state }) => readingRoot(rule.states[state]!, entry)),
+    beginningRoots: Float64Array.from(slots, ({ entry, state }) =>
+      known ? Number.POSITIVE_INFINITY : readingRoot(rule.states[state]!, entry),
+    ),
     slotStates: Int32Array.from(slots, ({ state }) => state),
     take,
   };

@@ -16,10 +16,12 @@ const dependent = 1e-3;
  * Twice a negative log-likelihood as an objective, with derivatives by differences.
  *
  * @param value - at the unknowns; infinite where the likelihood does not exist.
+ * @param settle - fits weights over gaps to a point.
  */
 export function likelihoodObjective(
   value: (at: Float64Array) => number,
   { names, lower, upper }: Unknowns,
+  settle?: Objective["settle"],
 ): Objective {
   const size = names.length;
   let last = new Float64Array(size);
@@ -28,6 +30,7 @@ export function likelihoodObjective(
   return {
     size,
     value,
+    ...(settle && { settle }),
     minimise(start, low, high) {
       // Each search by the size of its own start: one that began far off would leave the others with huge steps.
       scale = start.map((each) => Math.abs(each) || 1);

@@ -28,6 +28,8 @@ export interface Objective {
   ) => Lowest;
   /** Slope of the value by unknown i where the last search ended. */
   readonly slope: (i: number) => number;
+  /** Fits weights that the objective takes from the optimum itself to a point; says whether one changed. */
+  readonly settle?: (at: Float64Array) => boolean;
   /** Inverse of half the second derivatives at the optimum; times `variance` it is the covariance. */
   readonly covariance: (at: Float64Array) => UnscaledCovariance;
 }

@@ -32,6 +32,8 @@ export interface Optimum {
 const tries = 5;
 /** Times that the fit is done again because a profile found a lower optimum. */
 const repeats = 4;
+/** Times that an optimum is looked for again with the weights that follow from it. */
+const settlings = 30;
 /** Evaluations spent on profiles before nothing more is done about searches that get stuck: many times the usual. */
 const mostEvaluations = 50_000;
 /** How far beyond the optimum its profiles look for other unknowns that have none. */
@@ -50,9 +52,10 @@ export function optimum(
   const varianceAt = (value: number): number => cutAt(value).variance;
   const search = (start: Float64Array): Lowest =>
     searchFrom(objective, start, unknowns, including(start, within, unknowns), varianceAt).lowest;
-  let searches = tried.map(search);
+  let searches: readonly Lowest[] = tried.map(search);
   const effort = { left: mostEvaluations };
   for (let repeat = 0; ; repeat++) {
+    searches = settled(objective, searches, search);
     const { unscaled, ...found } = lowestOf(objective, searches, unknowns, within, cutAt);
     const { at, value, cut } = found;
     const rivals = rivalOptima(objective, found, searches, unknowns, within, cut.variance);
@@ -84,6 +87,22 @@ export function optimum(
   }
 }
 
+/** Searches done again until the weights that an objective takes from its optimum are those at the optimum found. */
+function settled(
+  objective: Objective,
+  searches: readonly Lowest[],
+  search: (start: Float64Array) => Lowest,
+): readonly Lowest[] {
+  let again = searches;
+  for (let round = 0; round < settlings && objective.settle?.(lowestEnd(again).estimates) === true; round++)
+    again = again.map(({ estimates }) => search(estimates));
+  return again;
+}
+
+function lowestEnd(searches: readonly Lowest[]): Lowest {
+  return searches.reduce((low, next) => (low.value <= next.value ? low : next));
+}
+
 type FoundOptimum = Pick<Optimum, "at" | "value" | "stop" | "cut" | "covariance" | "unbounded"> & {
   readonly unscaled: UnscaledCovariance;
 };
@@ -96,7 +115,7 @@ function lowestOf(
   within: SearchBounds,
   cutAt: (value: number) => Cut,
 ): FoundOptimum {
-  const lowest = searches.reduce((low, next) => (low.value <= next.value ? low : next));
+  const lowest = lowestEnd(searches);
   const known = (at: Lowest): Omit<FoundOptimum, "at" | "value" | "stop" | "unbounded"> => {
     const cut = cutAt(at.value);
     const unscaled = objective.covariance(at.estimates);

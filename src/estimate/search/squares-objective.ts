@@ -28,6 +28,7 @@ export function squaresObjective(system: LinearisedSystem, rows: FitRows): Objec
   return {
     size,
     value: system.evaluate,
+    ...(rows.reweigh && { settle: rows.reweigh }),
     minimise(start, lower, upper, enough = Number.NEGATIVE_INFINITY) {
       const plain = minimiseSquares(system, start, { lower, upper, workspace, iterationLimit });
       const { sumOfSquares: sum } = plain;

@@ -14,7 +14,7 @@ const settling = 200;
 
 /**
  * Makes records [rows of the group, states] of a state-space fit: the state moved with process errors from the first
- * reading (or, after a stationary start, from the long run), and read with observation errors.
+ * reading or known state (or, after a stationary start, from the long run), and read with observation errors.
  *
  * @param readingVariance - of a reading of weight 1, by state, at the unknowns placed last.
  */

@@ -14,8 +14,8 @@ export interface Filtered {
   /** Standard deviations of one step and of one reading, by state, on the fitting scale. */
   readonly processError: Readonly<Record<string, number>>;
   readonly observationError: Readonly<Record<string, number>>;
-  /** How the first value was taken: from the rule's long-run distribution, or as it was read. */
-  readonly start: "stationary" | "diffuse";
+  /** How the first value was taken: from the rule's long-run distribution, as it was read, or as `initial` gives it. */
+  readonly start: "stationary" | "diffuse" | "known";
   /** Exact where the rule is linear on the fitting scale; otherwise the rule's slope is taken at the estimated state. */
   readonly method: "exact" | "extended";
   /** Of an extended filter. */

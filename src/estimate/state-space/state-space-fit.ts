@@ -16,38 +16,35 @@ import { type StateSpaceSearch, stateSpaceSearch } from "./state-space-search.js
 /** Standard deviations of the long run beyond which a first value does not pass for one of them. */
 const farOut = 3;
 
-/** Fits a rule with errors in its steps and in its readings, their shares found from the record. */
+/**
+ * Fits a rule with errors in its steps and in its readings, their shares found from the record. Whether the first
+ * reading passes for one of the long run is judged by a fit that does not take it for one: a fit that does widens the
+ * long run until the reading lies in it.
+ */
 export function stateSpaceFit(rule: Rule, group: ObservedGroup, options: FitOptions): GroupFit {
-  const first = stateSpaceSearch(rule, group, options);
-  const fitted = solved(rule, first, options) ?? fromFirstReading(rule, first, options);
+  const search = stateSpaceSearch(rule, group, options);
+  const settled = search.filtering.method === "exact" && search.filtering.start === "diffuse";
+  const fitted = (settled ? fromLongRun(rule, search, options) : undefined) ?? solved(rule, search, options);
   if (fitted === undefined) throw refuseNoStart(group, rule.text);
   return fitted;
 }
 
-/** Where the first reading does not pass for one of the long run, it is taken as read. */
-function fromFirstReading(rule: Rule, first: StateSpaceSearch, options: FitOptions): GroupFit | undefined {
-  const { start, method } = first.filtering;
-  if (start === "diffuse") return undefined;
-  const filtering = { start: "diffuse", method } as const;
-  return solved(rule, stateSpaceSearch(rule, first.group, options, filtering, first.begun()), options);
+function fromLongRun(rule: Rule, asRead: StateSpaceSearch, options: FitOptions): GroupFit | undefined {
+  const { objective, unknowns, cutAt, space, group, begun } = asRead;
+  const starts = asRead.starts();
+  if (starts.length === 0) return undefined;
+  const { at } = optimum(objective, unknowns, starts, cutAt, false);
+  if (!(Math.abs(space.firstInLongRun(at)) <= farOut)) return undefined;
+  const filtering = { start: "stationary", method: "exact" } as const;
+  return solved(rule, stateSpaceSearch(rule, group, options, filtering, [at, ...begun()]), options);
 }
 
 function solved(rule: Rule, search: StateSpaceSearch, options: FitOptions): GroupFit | undefined {
   const starts = search.starts();
   if (starts.length === 0) return undefined;
-  const { objective, unknowns, cutAt, filtering, space } = search;
+  const { objective, unknowns, cutAt } = search;
   const found = optimum(objective, unknowns, starts, cutAt, options.intervals !== "none");
-  if (filtering.start === "stationary" && !beginsInLongRun(space, found)) return undefined;
   return described(rule, search, options, found);
-}
-
-/** Whether the first reading passes for one from the long run at the estimates. */
-function beginsInLongRun(space: StateSpace, found: Optimum): boolean {
-  space.rows.prepare(found.at, false);
-  const first = Math.abs(space.rows.residualAt(0));
-  let squares = 0;
-  for (let i = 0; i < space.rows.count; i++) squares += space.rows.residualAt(i) ** 2;
-  return first <= farOut * Math.max(space.longRunSd(found.at), Math.sqrt(squares / space.rows.count));
 }
 
 function described(rule: Rule, search: StateSpaceSearch, options: FitOptions, found: Optimum): GroupFit {

@@ -3,12 +3,14 @@ import type { Rule } from "../../rule/index.js";
 import type { FitOptions } from "../options/fit-options.js";
 import { scaleOf } from "../problem/scale.js";
 import type { Search } from "../problem/search.js";
+import { refusePartOfStart } from "../refusals.js";
 import { criteriaOf } from "../result/criteria.js";
 import type { FitRows } from "../rows/fit-rows.js";
 import { likelihoodCut } from "../search/cut.js";
 import { likelihoodObjective } from "../search/likelihood-objective.js";
 import { startingPoints } from "../search/starting-points.js";
 import { prepared } from "../systems/prepared.js";
+import { slotsOf } from "../unknowns/slots.js";
 import { spreadNames } from "../unknowns/spread-names.js";
 import { type Unknowns, unknownsOf } from "../unknowns/unknowns.js";
 import { type Filtering, isLinearOnScale, type StateSpace, stateSpace } from "./state-space.js";
@@ -29,7 +31,7 @@ export interface StateSpaceSearch extends Search {
 }
 
 /**
- * @param filtering - how a search before this one filtered; by default as the rule allows, from a stationary start.
+ * @param filtering - how a search before this one filtered; by default as the rule allows, from the first state as given or as read.
  * @param given - where a search before this one began.
  */
 export function stateSpaceSearch(
@@ -80,7 +82,15 @@ function filteringOf(
   [first]: readonly Float64Array[],
 ): Filtering {
   const exact = first !== undefined && isLinearOnScale(rule, group, unknowns, options, first);
-  return exact ? { method: "exact", start: "stationary" } : { method: "extended", start: "diffuse" };
+  return { method: exact ? "exact" : "extended", start: isKnown(rule, unknowns) ? "known" : "diffuse" };
+}
+
+/** Whether the first state is given; part of a state vector is no beginning. */
+function isKnown(rule: Rule, { initial }: Unknowns): boolean {
+  if (initial.every(Number.isNaN)) return false;
+  const open = slotsOf(rule).filter((_, s) => Number.isNaN(initial[s]));
+  if (open.length > 0) throw refusePartOfStart(rule.states, open);
+  return true;
 }
 
 /** Starts of a one-step fit, its scatter split between the two errors in several ways. */

@@ -24,8 +24,8 @@ export interface StateSpace {
   readonly belief: Belief;
   /** What particles need at the unknowns given. */
   readonly particleModel: (at: Float64Array) => ParticleModel;
-  /** Standard deviation of a reading in the long run; NaN where there is none. */
-  readonly longRunSd: (at: Float64Array) => number;
+  /** The first reading less the mean of readings in the long run, over their standard deviation; NaN without a long run. */
+  readonly firstInLongRun: (at: Float64Array) => number;
   /** One-step prediction errors over their standard deviations, [values compared]. */
   readonly standardised: (at: Float64Array) => Float64Array;
   /** A record drawn at the unknowns given: values [rows of the group, states], own unit. */
@@ -34,7 +34,7 @@ export interface StateSpace {
 
 /** How the first reading is taken, and whether the rule is linear, so that the filter is exact. */
 export interface Filtering {
-  readonly start: "stationary" | "diffuse";
+  readonly start: "stationary" | "diffuse" | "known";
   readonly method: "exact" | "extended";
 }
 
@@ -44,7 +44,9 @@ export interface Filtering {
  * every state, the latter only where it is not given.
  *
  * A diffuse beginning takes the first reading as the state, with the reading's own error, and leaves it out of
- * the likelihood; a stationary one, for a single state with a stable linear rule, takes it from the long run.
+ * the likelihood; a stationary one, for a single state with a stable linear rule, takes it from the long run. A known
+ * beginning has no error, and leaves the first reading out too: where the given value is that reading, the reading would
+ * pass for one without error.
  *
  * @see Harvey (1989), Forecasting, Structural Time Series Models and the Kalman Filter, sections 3.2 and 3.3.
  * @see Dennis, Ponciano, Lele, Taper and Staples (2006), Ecological Monographs 76:323, for the Gompertz rule.
@@ -59,14 +61,14 @@ export function stateSpace(
   const dynamics = dynamicsOf(rule, group, options);
   const slots = slotsOf(rule).length;
   const belief: Belief = { mean: new Float64Array(slots), covariance: new Float64Array(slots * slots) };
-  const readings = readingsOf(rule, group, options);
+  const readings = readingsOf(rule, group, options, start === "known" ? unknowns.initial : undefined);
   const { parameters, spreads } = unknowns;
   const variance = new Float64Array(rule.states.length);
   // Known standard deviations of single readings are part of their weights.
   const known = typeof options.sd === "string" ? 1 : options.sd;
   const readingVariance = (s: number): number =>
     known === undefined ? spreads[rule.states.length + s]! : known * known;
-  const from = start === "diffuse" ? readings.skipped : 0;
+  const from = start === "stationary" ? 0 : readings.skipped;
 
   const setDown = (at: Float64Array): void => {
     place(unknowns, at);
@@ -116,10 +118,13 @@ export function stateSpace(
         readingSd: sds,
       };
     },
-    longRunSd(at) {
+    firstInLongRun(at) {
       setDown(at);
-      const linear = linearAt(dynamics, parameters, readings, variance[0]!, readingVariance(0));
-      return Math.sqrt((longRun(linear)?.variance ?? Number.NaN) + readingVariance(0));
+      const own = readingVariance(0) / readings.beginningRoots[0]! ** 2;
+      const run = longRun(linearAt(dynamics, parameters, readings, variance[0]!, own));
+      return run === undefined
+        ? Number.NaN
+        : (readings.beginning[0]! - run.mean) / Math.sqrt(run.variance + own);
     },
     draw: drawStateSpace(rule, group, options, unknowns, readings, start, readingVariance),
     standardised(at) {

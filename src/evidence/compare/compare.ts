@@ -2,7 +2,13 @@ import { type Fit, problemOf } from "../../estimate/index.js";
 import { type RunHooks, ticker } from "../../numeric/index.js";
 import { type RollingOrigin, rollingOrigin } from "../forecasts/rolling-origin.js";
 import { refuseExact } from "../refit/refuse-exact.js";
-import { refuseOneFit, refuseUnlikeErrors, refuseUnlikeRecords, refuseUnlikeStarts } from "../refusals.js";
+import {
+  refuseOneFit,
+  refuseUnlikeErrors,
+  refuseUnlikeFilters,
+  refuseUnlikeRecords,
+  refuseUnlikeStarts,
+} from "../refusals.js";
 import { type ComparisonRow, comparisonRows } from "./comparison-row.js";
 import { type ComparisonVerdict, comparisonVerdict } from "./comparison-verdict.js";
 import { fitLabels } from "./fit-labels.js";
@@ -102,6 +108,7 @@ function refuseUnlike(first: Fit, other: Fit): void {
     first.groups[0]!.count !== other.groups[0]!.count
   )
     throw refuseUnlikeStarts(first.groups[0]!.count, other.groups[0]!.count);
+  refuseUnlikeBeginnings(first, other);
   const same =
     first.groups.length === other.groups.length &&
     first.groups.every((group, g) => {
@@ -114,6 +121,18 @@ function refuseUnlike(first: Fit, other: Fit): void {
   if (!same) {
     const [one, two] = fitLabels([first, other]);
     throw refuseUnlikeRecords(one!, two!);
+  }
+}
+
+/** A filter that begins in the long run explains the first reading, one that begins at it does not. */
+function refuseUnlikeBeginnings(first: Fit, other: Fit): void {
+  for (const group of first.groups) {
+    const twin = other.groups.find((each) => each.group === group.group);
+    const starts = [group.filter?.start, twin?.filter?.start];
+    const isLongRun = starts.map((start) => start === "stationary");
+    if (twin === undefined || starts.includes(undefined) || isLongRun[0] === isLongRun[1]) continue;
+    const [one, two] = fitLabels([first, other]);
+    throw refuseUnlikeFilters([one!, two!], [group.count, twin.count], first.rule.states);
   }
 }
 

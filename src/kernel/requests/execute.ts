@@ -92,8 +92,9 @@ async function runCell(kernel: KernelState, execution: Execution): Promise<CellO
   try {
     const session = kernel.session();
     const languages = hasString.test(code) ? await kernel.languages() : [];
-    const refused = stringErrors(session.compiler.library, languages, code);
-    const outcome = refused ?? (await session.run(code, cellName(run.serial), label, () => run.stopped));
+    const languageErrors = stringErrors(session.compiler.library, languages, code);
+    const outcome =
+      languageErrors ?? (await session.run(code, cellName(run.serial), label, () => run.stopped));
     const isShown = outcome.kind === "value" && !run.silent && !isDisplayHandle(outcome.value);
     if (isShown) await show(outcome.value, execution);
     return outcome;

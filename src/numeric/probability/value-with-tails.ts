@@ -10,7 +10,7 @@ const largest = 2 ** 1020;
  */
 export function valueWithTails(at: (value: number) => TailsWithSlope, wanted: Tails, start: number): number {
   if (wanted.lower === 0) return 0;
-  let value = start;
+  let value = Math.min(Math.max(start, smallest), largest);
   let low = 0;
   let high = Number.POSITIVE_INFINITY;
   if (wanted.upper === 0) return high;
@@ -23,7 +23,8 @@ export function valueWithTails(at: (value: number) => TailsWithSlope, wanted: Ta
     value = insideBracket(next, low, high);
     if (low >= high * (1 - Number.EPSILON)) break;
   }
-  return low && high;
+  if (high <= smallest) return 0;
+  return low >= largest ? Number.POSITIVE_INFINITY : value;
 }
 
 /** How far the smaller tail wanted is missed on the logarithmic scale, and the step that mends it there. */
@@ -39,6 +40,6 @@ function newtonStep(
 /** The next value, or one that divides the bracket where the iteration leaves it. */
 function insideBracket(next: number, low: number, high: number): number {
   if (next > low && next < high) return next;
-  if (low === 0) return high * 1e-3;
-  return high === Number.POSITIVE_INFINITY ? low * 1e3 : Math.sqrt(low) * Math.sqrt(high);
+  if (low === 0) return Math.max(high * 1e-3, smallest);
+  return high === Number.POSITIVE_INFINITY ? Math.min(low * 1e3, largest) : Math.sqrt(low) * Math.sqrt(high);
 }

@@ -38,7 +38,8 @@ export function drawAlongProfile(fit: Fit, group: GroupFit, loose: Estimate): Pa
     const root = studentQuantile(stream.uniform(), group.degreesOfFreedom);
     const { low, high, share } = around(rungs, root);
     const { factor } = share < 0.5 ? low : high;
-    let distance = root * root;
+    // Of the place that is drawn, which beyond the last one looked at is nearer than the t value says.
+    let distance = (low.root + share * (high.root - low.root)) ** 2;
     for (let i = 0; i < size - 1; i++) {
       normals[i] = stream.normal();
       distance += normals[i]! * normals[i]!;

@@ -14,7 +14,7 @@ export const perStateUnit = (meaning: string): NamedQuantity => quantity(meaning
 export const quantityWithUnit = (meaning: string, unit: string): NamedQuantity => quantity(meaning, unit);
 
 export const positive: readonly [number, number] = [0, Number.POSITIVE_INFINITY];
-/** Of a state that the rule takes below 0 only where it no longer holds. */
+/** For a state that falls below 0 only where the rule is no longer valid. */
 export const neverNegative: Bounds = { range: positive, atBounds: "error" };
 export const aboveOne: readonly [number, number] = [1, Number.POSITIVE_INFINITY];
 export const fraction: readonly [number, number] = [0, 1];

@@ -1,6 +1,6 @@
 import type { RuleCatalogue } from "./rules.js";
 
-/** What each rule of the catalogue is called in titles, tables and sentences, unless `name` says otherwise. */
+/** Names of the catalogue's rules in titles, tables and sentences; option `name` overrides them. */
 export const shortNames: Readonly<Record<keyof RuleCatalogue, string>> = {
   constantChange: "constant change",
   geometric: "geometric",

@@ -31,7 +31,7 @@ function checkName(name: unknown): void {
   const given = JSON.stringify(name) ?? String(name);
   throw new ModelError(
     "unreadable-option",
-    `Option \`name\` must be a text; ${given} was given. Write \`name: "crowding"\`.`,
+    `Option \`name\` must be a non-empty string, but ${given} was given. Write \`name: "crowding"\`.`,
     { option: "name", given },
   );
 }
@@ -47,7 +47,7 @@ interface OptionCheck {
 
 const isRange = (value: unknown): boolean =>
   Array.isArray(value) && value.length === 2 && value[0] < value[1];
-const isRangeWithEnds = (value: unknown): boolean => {
+const isBoundsWithBehaviour = (value: unknown): boolean => {
   const { range, atBounds } = (value ?? {}) as { readonly range?: unknown; readonly atBounds?: unknown };
   return isRange(range) && (atBounds === "absorbed" || atBounds === "error");
 };
@@ -70,9 +70,9 @@ function checks(rule: CheckedRule): readonly OptionCheck[] {
       what: "state or parameter",
       names: [...states, ...parameters],
       expected: (name) =>
-        `two numbers, the lower one first, as in [0, Infinity]${states.includes(name) ? ', or { range: [0, Infinity], atBounds: "absorbed" or "error" }' : ""}`,
+        `two numbers, the lower one first, as in [0, Infinity]${states.includes(name) ? ', or { range: [0, Infinity], atBounds: "error" } (or "absorbed")' : ""}`,
       accepts: (value: unknown, name: string) =>
-        isRange(value) || (states.includes(name) && isRangeWithEnds(value)),
+        isRange(value) || (states.includes(name) && isBoundsWithBehaviour(value)),
     },
     { option: "start", what: "parameter", names: parameters, expected: number, accepts: isNumber },
     { option: "fixed", what: "parameter", names: parameters, expected: number, accepts: isNumber },

@@ -2,7 +2,7 @@ import { parseUnit, sameUnit, type Unit } from "./unit.js";
 
 const isScale = (word: string): boolean => /^[\d.]/u.test(word);
 
-/** The number that a unit is counted in: 10000 for "10^4 cells/mL". */
+/** Numeric factor of a unit: 10000 for "10^4 cells/mL". */
 function scaleOf(unit: Unit): number {
   return [...unit].reduce((product, [word, power]) => {
     const [base = "", exponent = "1"] = isScale(word) ? word.split("^") : ["1"];
@@ -13,8 +13,8 @@ function scaleOf(unit: Unit): number {
 const withoutScale = (unit: Unit): Unit => new Map([...unit].filter(([word]) => !isScale(word)));
 
 /**
- * How two stated units clash: they are of different kinds ("kind"), or one counts in multiples of the other, and by
- * which factor. Undefined where they agree or one of them is not stated.
+ * Difference between two stated units: "kind" if they measure different things, otherwise the factor between them.
+ * Undefined if they agree, or if one of them is not stated.
  *
  * @example unitClash("10^4 cells/mL", "cells per mL"); // 10000
  */

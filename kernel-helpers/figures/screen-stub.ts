@@ -1,5 +1,5 @@
-/** What the plotting library asks of a screen and jsdom does not have; sizes of text are estimated. */
-export function standInForScreen(window: ScreenlessWindow): void {
+/** Adds the screen functions that the plotting library needs and jsdom lacks; text sizes are estimated. */
+export function stubScreen(window: ScreenlessWindow): void {
   const { URL, Element, SVGElement, HTMLCanvasElement } = window;
   URL.createObjectURL = () => "blob:none";
   window.matchMedia = () => ({ matches: false, addListener() {}, removeListener() {} });
@@ -16,7 +16,7 @@ export function standInForScreen(window: ScreenlessWindow): void {
   };
 }
 
-/** The box of a text whose first line begins (or, by its anchor, centres or ends) at the origin. */
+/** Bounding box of a text whose first line starts, is centred or ends at the origin, by its anchor. */
 function textBox(this: PageElement): { x: number; y: number; width: number; height: number } {
   const spans = [...this.querySelectorAll("tspan.line")].map((span) => span.textContent ?? "");
   const lines = spans.length > 0 ? spans : [this.textContent ?? ""];
@@ -32,12 +32,12 @@ function fontSize(element: PageElement): number {
   return Number.parseFloat(element.style?.fontSize || "13") || 13;
 }
 
-/** A letter of a plain typeface is about six tenths as wide as it is high, a bold one a little more. */
+/** An average letter is about 0.6 times as wide as the font size, a bold one a little more. */
 function letterWidth(element: PageElement): number {
   return fontSize(element) * (element.style?.fontWeight === "bold" ? 0.66 : 0.6);
 }
 
-/** Ends of a path that is one straight line, "M0,0L30,40": the only kind that is ever measured (an arrow's). */
+/** Ends of a straight path, "M0,0L30,40": the only kind that is measured (for arrows). */
 function lineEnds(element: PageElement): [number, number, number, number] {
   const numbers = (element.getAttribute("d") ?? "").match(/-?\d+(\.\d+)?(e-?\d+)?/g)?.map(Number) ?? [];
   const [x0 = 0, y0 = 0] = numbers;
@@ -56,7 +56,7 @@ function pointAlong(this: PageElement, distance: number): { x: number; y: number
   return { x: x0 + share * (x1 - x0), y: y0 + share * (y1 - y0) };
 }
 
-/** The little that is used of a page's window. */
+/** The parts of a window that are used. */
 export interface ScreenlessWindow {
   matchMedia: () => object;
   readonly URL: { createObjectURL: () => string };

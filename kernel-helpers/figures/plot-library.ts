@@ -5,24 +5,24 @@ const packages = createRequire(__filename);
 let sent = false;
 
 /**
- * The plotting library as one script element, the first time it is asked for in a session; "" afterwards.
+ * The plotting library as one script element on the first call of a session; "" afterwards.
  *
- * A notebook keeps it with its first figure; figures before and after find it, because they queue for it.
+ * A notebook stores it with its first figure; all figures find it, because they queue for it.
  */
-export function libraryOnce(): string {
+export function plotLibraryOnce(): string {
   if (sent) return "";
   sent = true;
   return libraryScript();
 }
 
-/** The next figure brings the library again: for a case that begins anew in the same session. */
-export function libraryAgain(): void {
+/** Makes the next figure include the library again, for a new case in the same session. */
+export function resetPlotLibrary(): void {
   sent = false;
 }
 
 /**
- * The library in a function whose arguments hide a page's module loader from it, which would take it away.
- * Then it draws what waits in the queue.
+ * The library inside a function whose arguments hide the module loader of the page, which would capture it. Then it
+ * draws the queued figures.
  */
 function libraryScript(): string {
   const code = readFileSync(packages.resolve("plotly.js-basic-dist-min"), "utf8").replace(

@@ -1,27 +1,27 @@
 import { formatDigits, superscript } from "../wording/index.js";
-import { absent, cellText } from "./cell-text.js";
+import { cellText, missingMark } from "./cell-text.js";
 import { commonDecimals } from "./common-decimals.js";
 import type { Column, Footnote, Table } from "./table.js";
 
-/** One cell ready to be drawn: its text, the letter of its footnote, and whether it is a number. */
+/** One formatted cell: text, footnote letter, and whether it is a number. */
 export interface Cell {
   readonly text: string;
   readonly mark: string;
   readonly numeric: boolean;
 }
 
-/** A table with every text decided: HTML and terminal differ only in how they draw this. */
-export interface LaidOut {
+/** A table with all texts formatted; HTML and plain text differ only in how they draw it. */
+export interface TableLayout {
   readonly headings: readonly Cell[];
   readonly rows: readonly (readonly Cell[])[];
   readonly totals: readonly (readonly Cell[])[];
-  /** Rows left out after this many shown ones; undefined when all are shown. */
-  readonly cutAfter: number | undefined;
+  /** Number of shown rows before the omitted ones; undefined when all are shown. */
+  readonly truncatedAfter: number | undefined;
   readonly notes: readonly { readonly mark: string; readonly text: string }[];
 }
 
-/** Decides what a table shows: rows within its limit, texts, footnote letters, and the notes it owes. */
-export function laidOut(table: Table): LaidOut {
+/** Formats a table: rows within its limit, texts, footnote letters and notes. */
+export function tableLayout(table: Table): TableLayout {
   const { columns, rows, totals, limit, format } = table;
   const cut = rows.length > limit;
   const head = cut ? Math.ceil(limit * 0.75) : rows.length;
@@ -29,7 +29,7 @@ export function laidOut(table: Table): LaidOut {
   const places = [...Array(head).keys(), ...Array.from({ length: tail }, (_, i) => rows.length - tail + i)];
   const marks = footnoteMarks(table.notes);
   const shown = [...places.map((place) => rows[place] ?? {}), ...totals];
-  const decimals = columns.map((column) => settledDecimals(column, shown));
+  const decimals = columns.map((column) => columnDecimals(column, shown));
   const texts = shown.map((row) =>
     columns.map((column, j) =>
       totals.includes(row) && row[column.key] === undefined ? "" : cellText(column, row, format, decimals[j]),
@@ -44,8 +44,8 @@ export function laidOut(table: Table): LaidOut {
     })),
   );
   const notes = [...marks.notes];
-  if (texts.some((line) => line.includes(absent))) notes.push({ mark: absent, text: "no value" });
-  if (cut) notes.push({ mark: "", text: cutNote(head, tail, rows.length, table) });
+  if (texts.some((line) => line.includes(missingMark))) notes.push({ mark: missingMark, text: "no value" });
+  if (cut) notes.push({ mark: "", text: truncationNote(head, tail, rows.length, table) });
   return {
     headings: headings(table)
       .map((text, j) => ({ column: columns[j] as Column, text }))
@@ -56,12 +56,12 @@ export function laidOut(table: Table): LaidOut {
       })),
     rows: cells.slice(0, places.length),
     totals: cells.slice(places.length),
-    cutAfter: cut ? head : undefined,
+    truncatedAfter: cut ? head : undefined,
     notes,
   };
 }
 
-function settledDecimals(
+function columnDecimals(
   column: Column,
   rows: readonly Readonly<Record<string, unknown>>[],
 ): number | undefined {
@@ -71,8 +71,8 @@ function settledDecimals(
 }
 
 /**
- * The headings of a table: label with unit, "Density (10⁴ cells/mL)"; a money column without a unit takes the
- * currency set. "to" behind "Interval, from" is written in full, because a heading is also read alone.
+ * The headings of a table: label with unit, "Density (10⁴ cells/mL)"; a money column without a unit gets the currency of
+ * the number format. "to" after "Interval, from" becomes "Interval, to", because a heading is also read alone.
  */
 export function headings({ columns, format }: Table): string[] {
   return columns.map((column, j) => {
@@ -84,7 +84,7 @@ export function headings({ columns, format }: Table): string[] {
   });
 }
 
-function cutNote(head: number, tail: number, all: number, { format }: Table): string {
+function truncationNote(head: number, tail: number, all: number, { format }: Table): string {
   const count = (n: number): string => formatDigits(String(n), format);
   const last = tail > 0 ? ` and ${count(all - tail + 1)} to ${count(all)}` : "";
   return `Rows 1 to ${count(head)}${last} of ${count(all)} are shown.`;
@@ -112,8 +112,8 @@ function footnoteMarks(notes: Table["notes"]): {
 }
 
 /**
- * Pads numbers on the right, so that decimal signs stand under each other in a right-aligned column. Estimates are
- * left as they are: a column of them holds parameters of different sizes, with nothing to compare.
+ * Pads numbers on the right, so that decimal signs are aligned in a right-aligned column. Estimates are not padded: such
+ * a column has parameters of different sizes.
  */
 function alignFractions(texts: string[][], columns: readonly Column[], decimal: string): void {
   columns.forEach((column, j) => {
@@ -132,7 +132,7 @@ function padding(width: number, widest: number): string {
   return width === 0 ? `\u2008${"\u2007".repeat(widest - 1)}` : "\u2007".repeat(widest - width);
 }
 
-/** Characters from the decimal sign on; undefined for what is no plain number. */
+/** Characters from the decimal sign on; undefined for anything but a plain number. */
 function fractionWidth(text: string, decimal: string): number | undefined {
   if (!/^[-<>]?\d[\d.,'\u00a0\u2009\u202f ]*%?$/.test(text)) return undefined;
   const at = text.lastIndexOf(decimal);

@@ -1,24 +1,24 @@
 import type { Places } from "./layer.js";
 
-/** Points kept of a long series: their places in it, and how many there were. */
-export interface Thinned {
+/** The plotted points of a long series: their indices, and the number of all points. */
+export interface Downsampled {
   readonly kept: readonly number[];
   readonly of: number;
 }
 
-/** More points than this a layer are thinned: a screen has no room to show them apart. */
-const most = 2000;
+/** Layers with more points than this are downsampled. */
+const maxPoints = 2000;
 
 /**
- * Picks the points of a long series to draw: from each run of neighbours the first, and those with the least and
- * greatest value on either axis, so that no extreme is lost.
+ * Selects the points of a long series to plot: of each run of neighbours the first one and the extremes on both axes, so
+ * that no extreme is lost.
  *
- * @returns undefined when all may be drawn.
+ * @returns undefined when all points are plotted.
  */
-export function thinned(x: Places, y: Places): Thinned | undefined {
+export function downsample(x: Places, y: Places): Downsampled | undefined {
   const n = Math.min(x.length, y.length);
-  if (n <= most) return undefined;
-  const runs = Math.floor(most / 5);
+  if (n <= maxPoints) return undefined;
+  const runs = Math.floor(maxPoints / 5);
   const kept: number[] = [];
   for (let run = 0; run < runs; run++) {
     const from = Math.floor((run * n) / runs);
@@ -30,7 +30,7 @@ export function thinned(x: Places, y: Places): Thinned | undefined {
   return { kept, of: n };
 }
 
-/** Places of the least and greatest number in a run; none where it holds no number. */
+/** Indices of the smallest and largest number in a run; none when it has no number. */
 function extremes(values: Places, from: number, to: number): number[] {
   let least = -1;
   let greatest = -1;

@@ -1,19 +1,19 @@
 import type { Panel } from "./figure.js";
 import { axisName, type PlotTrace } from "./plot-traces.js";
 
-/** Where one panel stands: shares of the plot's width and height, and how many letters its axis titles hold. */
-export interface PanelPlace {
+/** Position of one panel as fractions of the plot, and the number of characters that its axis titles can have. */
+export interface PanelPosition {
   readonly x: readonly [number, number];
   readonly y: readonly [number, number];
   readonly columns: number;
   readonly rows: number;
-  /** Pixels that the labels of the upright axis take. */
+  /** Width of the labels of the vertical axis, in pixels. */
   readonly labels: number;
 }
 
-/** The places of all panels, and the pixels around them. */
-export interface PanelPlaces {
-  readonly panels: readonly PanelPlace[];
+/** Positions of all panels, and margins in pixels. */
+export interface PanelLayout {
+  readonly panels: readonly PanelPosition[];
   readonly height: number;
   readonly margin: {
     readonly l: number;
@@ -22,20 +22,20 @@ export interface PanelPlaces {
     readonly b: number;
     readonly pad: number;
   };
-  /** Lower edge of the legend, as a share of the plot's height. */
+  /** Lower edge of the legend, as a fraction of the plot height. */
   readonly legend: number;
 }
 
 const letter = 7.8;
 const narrow = 560;
 
-/** Lays panels out in one column on a narrow screen, else in two (three when there are many). */
-export function panelPlaces(
+/** One column of panels on a narrow screen, otherwise two (three when there are many). */
+export function panelLayout(
   shown: readonly Panel[],
   width: number,
   title: number,
   data: readonly PlotTrace[],
-): PanelPlaces {
+): PanelLayout {
   const count = shown.length;
   const across = count === 1 || width < narrow ? 1 : count > 6 ? 3 : 2;
   const down = Math.ceil(count / across);
@@ -68,7 +68,7 @@ export function panelPlaces(
   };
 }
 
-/** Pixels for the longest label of an upright axis: names as they are, numbers by the digits that ticks need. */
+/** Width in pixels of the longest label of a vertical axis: names, or the digits of its ticks. */
 function labelWidth(data: readonly PlotTrace[], at: number): number {
   const values = data
     .filter((trace) => trace["yaxis"] === axisName("y", at))
@@ -80,7 +80,7 @@ function labelWidth(data: readonly PlotTrace[], at: number): number {
   return greatest >= 1e5 || (greatest > 0 && greatest < 0.01) ? 64 : 46;
 }
 
-/** Height of a legend that stands above the panels and breaks into rows of equal columns. */
+/** Height of the legend above the panels, which wraps into rows of equal columns. */
 function legendHeight(data: readonly PlotTrace[], width: number): number {
   const names = data
     .filter((trace) => trace["showlegend"])
@@ -93,7 +93,7 @@ function legendHeight(data: readonly PlotTrace[], width: number): number {
   return rows * 20 * Math.max(...names.map((lines) => lines.length)) + 8;
 }
 
-/** Letters of a label, its numbered signs counted as one. */
+/** Characters of a label, with character references counted as one. */
 function shownLength(label: string): number {
   return label.replace(/&#\d+;/g, "?").length;
 }

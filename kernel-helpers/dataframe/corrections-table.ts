@@ -4,17 +4,17 @@ const corrected = " (corrected)";
 const leftOut = "left out";
 
 /**
- * A record as it is shown and written: behind the columns as they were read, a column of what is used instead for
- * every column with a correction, and one that tells which rows are left out, where any is.
+ * A record with its corrections: after the columns as read, a column of corrected values for each corrected column, and
+ * one that marks excluded rows, if any.
  */
-export function shownTable(table: ColumnTable): ColumnTable {
+export function withCorrectionColumns(table: ColumnTable): ColumnTable {
   const { decisions = [] } = table;
   const used = decided(table);
   const names = [...table.names];
   const columns = [...table.columns];
   for (const name of new Set(decisions.map(({ column }) => column))) {
     const isRow = name === "";
-    names.push(free(isRow ? leftOut : `${name}${corrected}`, names));
+    names.push(uniqueName(isRow ? leftOut : `${name}${corrected}`, names));
     columns.push(
       isRow ? rowsOut(table) : packed(Array.from<unknown>(columnNamed(used, name, "a correction"))),
     );
@@ -22,17 +22,17 @@ export function shownTable(table: ColumnTable): ColumnTable {
   return { names, columns };
 }
 
-/** What columns of these names say that a written record brings back, each a whole sentence. */
-export function marksFound(names: readonly string[]): readonly string[] {
+/** Notes on columns of corrections in a record that was written and read again. */
+export function correctionNotes(names: readonly string[]): readonly string[] {
   const found = names
     .filter((name) => names.includes(`${name}${corrected}`))
     .map(
       (name) =>
-        `"${name}" is as it was first read; what was used instead stands in "${name}${corrected}". Name the one you mean.`,
+        `Column "${name}" has the values as first read; "${name}${corrected}" has the corrected ones. Choose one of the two.`,
     );
   if (names.includes(leftOut))
     found.push(
-      `"${leftOut}" may mark rows that were left out: where: { "${leftOut}": false } takes the others.`,
+      `Column "${leftOut}" marks excluded rows; give where: { "${leftOut}": false } to use only the others.`,
     );
   return found;
 }
@@ -44,8 +44,8 @@ function rowsOut(table: ColumnTable): readonly boolean[] {
   return Array.from({ length: rowCount(table) }, (_, row) => out.has(row));
 }
 
-/** A database file does not tell capital letters from small ones. */
-function free(name: string, taken: readonly string[]): string {
+/** Unique without regard to case, as database files require. */
+function uniqueName(name: string, taken: readonly string[]): string {
   const known = new Set(taken.map((each) => each.toLowerCase()));
   let chosen = name;
   for (let n = 2; known.has(chosen.toLowerCase()); n++) chosen = `${name} (${n})`;

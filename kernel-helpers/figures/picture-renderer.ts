@@ -1,10 +1,10 @@
 import { readFile } from "node:fs/promises";
 import { createRequire } from "node:module";
-import { look } from "../tables/index.js";
+import { theme } from "../tables/index.js";
 import { indexedPng } from "./indexed-png.js";
-import { type ScreenlessWindow, standInForScreen } from "./screen-stand-in.js";
+import { type ScreenlessWindow, stubScreen } from "./screen-stub.js";
 
-/** Draws one plot as a PNG. */
+/** Renders one plot as a PNG. */
 export type DrawPicture = (
   data: readonly object[],
   layout: Readonly<Record<string, unknown>>,
@@ -14,10 +14,10 @@ const zoom = 1.6;
 const packages = createRequire(__filename);
 
 /**
- * Sets up the plotting library on a page without a screen, and draws one small plot so that the first real one
- * is as quick as the rest.
+ * Loads the plotting library in a page without a screen, and draws a small plot so that the first real one is as fast as
+ * later ones.
  */
-export async function pictureStudio(): Promise<DrawPicture> {
+export async function pictureRenderer(): Promise<DrawPicture> {
   const [{ JSDOM, VirtualConsole }, { Resvg }, library] = await Promise.all([
     import("jsdom"),
     import("@resvg/resvg-js"),
@@ -25,11 +25,11 @@ export async function pictureStudio(): Promise<DrawPicture> {
   ]);
   const page = new JSDOM("<!doctype html><body></body>", {
     runScripts: "outside-only",
-    // What the library logs is about a screen that is not there.
+    // The library logs warnings about the missing screen.
     virtualConsole: new VirtualConsole(),
   });
   const window = page.window as PlotWindow;
-  standInForScreen(window);
+  stubScreen(window);
   window.eval(library);
   const draw: DrawPicture = async (data, layout) => {
     const size = { width: Number(layout["width"]), height: Number(layout["height"]) };
@@ -39,7 +39,7 @@ export async function pictureStudio(): Promise<DrawPicture> {
     );
     const options = {
       fitTo: { mode: "zoom", value: zoom },
-      background: look.paper,
+      background: theme.background,
       font: { defaultFontFamily: "DejaVu Sans" },
     } as const;
     const { width, height, pixels } = new Resvg(svg, options).render();

@@ -2,10 +2,10 @@ import type { Observations, ObservedGroup } from "../../src/record/index.js";
 import { type ColumnTable, packed } from "../../src/record/index.js";
 
 /**
- * Observations as one table: series, row of the record, step, period, then states, inputs, and where present
- * weights, censoring (-1 below, 1 above) and replicates. Steps from `step`, one a row.
+ * Observations as one table, one row per observation: series, row of the record, step, period, states, inputs, and if
+ * present weights, censoring (-1 below, 1 above) and replicates.
  */
-export function observedTable(observations: Observations): ColumnTable {
+export function observationsTable(observations: Observations): ColumnTable {
   const { groups, states, inputs, axis } = observations;
   const columns: [string, (group: ObservedGroup, i: number) => unknown][] = [];
   if (groups.length > 1) columns.push(["series", (group) => group.name]);

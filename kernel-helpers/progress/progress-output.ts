@@ -1,24 +1,24 @@
-import { type Bundle, escapeHtml, look, oneLine, typeface } from "../tables/index.js";
+import { type Bundle, escapeHtml, oneLine, theme, typeface } from "../tables/index.js";
 
-/** Where progress is seen, and how it is told to stop. */
-export interface ProgressPlace {
+/** Where progress is shown, and how it is interrupted. */
+export interface ProgressOutput {
   /** Seconds on any clock that only goes forward. */
   readonly now: () => number;
-  /** Replaces the line last shown. `share` is the part that is done, undefined when unknown or when it is over. */
+  /** Replaces the last line. `share` is the part done; undefined when unknown or finished. */
   readonly show: (line: string, share: number | undefined, last: boolean) => void;
-  /** Whether the analyst has asked for the work to stop. */
+  /** Whether the work was interrupted. */
   readonly interrupted: () => boolean;
 }
 
 type Display = (bundle: Bundle, options: { display_id: string; update?: boolean }) => void;
 
-/** By this a page for the client knows what is of use only to who ran the notebook. */
+/** Marks outputs that a page omits. */
 const mark = "application/vnd.periodwise.progress+json";
 
 let displays = 0;
 
-/** The notebook when a kernel offers one, else the terminal. */
-export function presentPlace(): ProgressPlace {
+/** The notebook if there is a kernel, otherwise the terminal. */
+export function currentOutput(): ProgressOutput {
   const offered = globalThis as { [name: symbol]: unknown };
   const display = offered[Symbol.for("periodwise.display")];
   const question = offered[Symbol.for("periodwise.interrupt")];
@@ -30,7 +30,7 @@ export function presentPlace(): ProgressPlace {
 }
 
 /** One display that is updated in place. */
-function inNotebook(display: Display): ProgressPlace["show"] {
+function inNotebook(display: Display): ProgressOutput["show"] {
   const display_id = `periodwise-progress-${process.pid}-${++displays}`;
   let shown = false;
   return (line, share) => {
@@ -40,8 +40,8 @@ function inNotebook(display: Display): ProgressPlace["show"] {
   };
 }
 
-/** One line that is written over; where the output is a file, only what stays. */
-function inTerminal(out: NodeJS.WriteStream): ProgressPlace["show"] {
+/** One line that is overwritten; only the final line when the output is a file. */
+function inTerminal(out: NodeJS.WriteStream): ProgressOutput["show"] {
   return (line, _share, last) => {
     if (out.isTTY)
       out.write(`\r\u001b[2K${oneLine(line).slice(0, out.columns - 1)}${last && line !== "" ? "\n" : ""}`);
@@ -50,11 +50,11 @@ function inTerminal(out: NodeJS.WriteStream): ProgressPlace["show"] {
 }
 
 function lineHtml(line: string, share: number | undefined): string {
-  const text = `font-family:${typeface};font-size:13px;color:${look.quiet};margin:.3em 0`;
+  const text = `font-family:${typeface};font-size:13px;color:${theme.mutedText};margin:.3em 0`;
   const percent = share === undefined ? 0 : Math.round(100 * share);
   const bar =
     share === undefined
       ? ""
-      : `;padding:.25em .6em;max-width:40em;border:1px solid ${look.line};background:linear-gradient(90deg,#d3e4e2 ${percent}%,${look.paper} ${percent}%)`;
+      : `;padding:.25em .6em;max-width:40em;border:1px solid ${theme.border};background:linear-gradient(90deg,#d3e4e2 ${percent}%,${theme.background} ${percent}%)`;
   return `<div class="pw-progress" role="status" dir="auto" style="${text}${bar}">${escapeHtml(line)}</div>`;
 }

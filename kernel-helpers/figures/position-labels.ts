@@ -3,48 +3,48 @@ import type { Axis, Panel } from "./figure.js";
 import type { Layer } from "./layer.js";
 import { significant } from "./number-text.js";
 
-/** How a place on an axis is written: as the label of its period where the axis has them, else as a number. */
-export function placeText({ periods }: Axis, place: number | string): string {
+/** Text of a position on an axis: the label of its period if the axis has labels, otherwise the number. */
+export function positionLabel({ periods }: Axis, place: number | string): string {
   if (typeof place === "string") return place;
   if (periods === undefined) return significant(place);
   return labelBetween(periods.axis, 0, (place - periods.zero) / periods.axis.step.every);
 }
 
-/** Periods from one tick to the next that a reader counts easily: parts of a year and years, or tens. */
-const strides = {
+/** Round numbers of periods between ticks. */
+const tickSteps = {
   months: [1, 2, 3, 6, 12, 24, 60, 120, 240, 600, 1200],
   others: [1, 2, 5, 10, 20, 50, 100, 200, 500, 1000, 2000, 5000, 10_000],
 };
 
-/** Where ticks stand on an axis of labelled periods, and what is written there; undefined on any other axis. */
+/** Positions and labels of the ticks of an axis of labelled periods; undefined for any other axis. */
 export function periodTicks(
   panel: Panel,
   columns: number,
 ): { readonly tickvals: readonly number[]; readonly ticktext: readonly string[] } | undefined {
   const { periods } = panel.x;
-  const ends = endsOf(panel);
+  const ends = axisRange(panel);
   if (periods === undefined || ends === undefined) return undefined;
   const { axis, zero } = periods;
   const [first, last] = ends.map((place) => (place - zero) / axis.step.every) as [number, number];
-  const room = Math.max(2, Math.floor(columns / (placeText(panel.x, ends[1]).length + 3)));
-  const choices = axis.counts === "months" && axis.stride === 1 ? strides.months : strides.others;
+  const room = Math.max(2, Math.floor(columns / (positionLabel(panel.x, ends[1]).length + 3)));
+  const choices = axis.counts === "months" && axis.stride === 1 ? tickSteps.months : tickSteps.others;
   const fitting = choices.find((each) => (last - first) / each <= room);
   const stride = fitting ?? Math.ceil((last - first) / room);
   const start = Math.ceil(first);
   const count = Math.max(0, Math.floor((last - start) / stride) + 1);
   const tickvals = Array.from({ length: count }, (_, k) => zero + (start + k * stride) * axis.step.every);
-  return { tickvals, ticktext: tickvals.map((place) => placeText(panel.x, place)) };
+  return { tickvals, ticktext: tickvals.map((place) => positionLabel(panel.x, place)) };
 }
 
-/** Least and greatest place that a panel draws; undefined where it draws none. */
-function endsOf({ x, layers }: Panel): readonly [number, number] | undefined {
+/** Smallest and largest position drawn in a panel; undefined if it draws none. */
+function axisRange({ x, layers }: Panel): readonly [number, number] | undefined {
   if (x.ends !== undefined) return x.ends;
-  const places = layers.flatMap(placesOf).filter((place) => !Number.isNaN(place));
+  const places = layers.flatMap(positionsOf).filter((place) => !Number.isNaN(place));
   if (places.length === 0) return undefined;
   return [places.reduce((a, b) => Math.min(a, b)), places.reduce((a, b) => Math.max(a, b))];
 }
 
-function placesOf(layer: Layer): readonly number[] {
+function positionsOf(layer: Layer): readonly number[] {
   if (!("x" in layer)) return [];
   return typeof layer.x === "object" ? Array.from<unknown, number>(layer.x, Number) : [Number(layer.x)];
 }
