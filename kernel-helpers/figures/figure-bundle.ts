@@ -16,7 +16,7 @@ export async function figureBundle(figure: Figure): Promise<Bundle> {
   const png = await drawPicture(plotSpec(figure, widths.wide, true));
   const picture = png && Buffer.from(png).toString("base64");
   return {
-    "text/html": figureHtml({ figure, numbers, notes, picture, library }),
+    "text/html": await figureHtml({ figure, numbers, notes, picture, library }),
     ...(picture ? { "image/png": picture } : {}),
     "text/plain": figureText(figure, numbers.map(tableText), notes),
   };

@@ -1,4 +1,3 @@
-import { createHash } from "node:crypto";
 import {
   escapeHtml,
   oneLine,
@@ -31,7 +30,9 @@ export interface FigureParts {
  * A figure as HTML: a picture, replaced by the interactive plot where scripts run and kept for print; its notes; and its
  * data, folded. The picture contains the title, so the script fills in the title of the page.
  */
-export function figureHtml({ figure, numbers, notes, picture, library }: FigureParts): string {
+export async function figureHtml({ figure, numbers, notes, picture, library }: FigureParts): Promise<string> {
+  // Loaded with the first figure, not with the package.
+  const { createHash } = await import("node:crypto");
   const title = escapeHtml(figure.title);
   const description = escapeHtml(describeFigure(figure).join(" "));
   const image = picture

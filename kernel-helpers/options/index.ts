@@ -1,1 +1,2 @@
 export { checkCall } from "./check-call.js";
+export { helpText } from "./help-text.js";

@@ -23,13 +23,17 @@ export const commands: Readonly<Record<string, Command>> = {
   kernel: async ({ words: [connectionFile] }) => {
     if (connectionFile === undefined)
       throw missingArgumentError("connection file", "periodwise kernel <connection file>");
-    runKernel(connectionFile, async () => {
-      const [{ ruleTextLanguage }, { glossaryTerms }] = await Promise.all([
-        import("./rule-text-language.js"),
-        import("./glossary-terms.js"),
-      ]);
-      return [ruleTextLanguage, glossaryTerms];
-    });
+    runKernel(
+      connectionFile,
+      async () => {
+        const [{ ruleTextLanguage }, { glossaryTerms }] = await Promise.all([
+          import("./rule-text-language.js"),
+          import("./glossary-terms.js"),
+        ]);
+        return [ruleTextLanguage, glossaryTerms];
+      },
+      async (name) => (await import("../../kernel-helpers/options/index.js")).helpText(name),
+    );
     return 0;
   },
   run: async ({ words, options, set }) => {

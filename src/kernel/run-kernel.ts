@@ -30,11 +30,13 @@ const displayName: unique symbol = Symbol.for("periodwise.display") as never;
  * Runs a kernel in this process until a front end shuts it down. Cells run in the current folder.
  *
  * @param languages - loads the services for languages inside strings of a cell; called when the kernel is idle.
+ * @param functionHelp - tells more about a function that a cell imports than its docstring does.
  * @throws {KernelError} `unreadable-connection-file` | `incomplete-connection-file`.
  */
 export function runKernel(
   connectionFile: string,
   languages: () => Promise<readonly StringLanguage[]> = async () => [],
+  functionHelp: KernelState["functionHelp"] = async () => undefined,
 ): void {
   const connection = readConnection(connectionFile);
   const session = randomUUID();
@@ -69,6 +71,7 @@ export function runKernel(
       services ??= languages();
       return services;
     },
+    functionHelp,
     questions: inputQuestions((request, content) => reply("stdin", request, "input_request", content)),
     history: [],
     publish,

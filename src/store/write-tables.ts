@@ -1,4 +1,3 @@
-import { randomUUID } from "node:crypto";
 import { copyFile, rename, rm, stat } from "node:fs/promises";
 import { basename, dirname, join, resolve } from "node:path";
 import { notWritableError, unknownFormatError } from "./errors.js";
@@ -42,7 +41,7 @@ export async function writeTables(
       "Use an Excel workbook (.xlsx), or write one of the tables.",
     );
   const full = resolve(path);
-  const temporary = join(dirname(full), `.${basename(full)}.${randomUUID().slice(0, 8)}`);
+  const temporary = join(dirname(full), `.${basename(full)}.${crypto.randomUUID().slice(0, 8)}`);
   try {
     if (format === "duckdb" && (await exists(full))) await copyFile(full, temporary);
     await writers[format](tables, temporary, path, options);

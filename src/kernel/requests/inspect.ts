@@ -9,7 +9,7 @@ import type { KernelState } from "./kernel-state.js";
 export async function inspect(kernel: KernelState, request: Message): Promise<object> {
   const cursor = cursorOf(request);
   const deep = request.content["detail_level"] === 1;
-  const markdown = (await aboutString(kernel, cursor)) ?? aboutCode(kernel, cursor, deep);
+  const markdown = (await aboutString(kernel, cursor)) ?? (await aboutCode(kernel, cursor, deep));
   if (markdown === undefined) return { status: "ok", found: false, data: {}, metadata: {} };
   const data = { "text/markdown": markdown, "text/plain": markdown.replace(/^```.*\n/gm, "") };
   return { status: "ok", found: true, data, metadata: {} };
@@ -20,15 +20,26 @@ async function aboutString(kernel: KernelState, { text, position }: Cursor): Pro
   return found?.language.inspect(found.text, position - found.start);
 }
 
-function aboutCode(kernel: KernelState, { text, position }: Cursor, deep: boolean): string | undefined {
+async function aboutCode(
+  kernel: KernelState,
+  { text, position }: Cursor,
+  deep: boolean,
+): Promise<string | undefined> {
   const { compiler, declarations } = kernel.session();
   const places = [position, position - 1, enclosingCallee(compiler.library, text, position)];
   for (const place of places) {
     if (place === undefined || place < 0) continue;
     const info = compiler.inspect(declarations(), text, place);
-    if (info?.displayParts?.length) return markdownOf(info as ts.QuickInfo, deep);
+    if (info?.displayParts?.length) return withHelp(kernel, info as ts.QuickInfo, deep);
   }
   return undefined;
+}
+
+/** What the compiler tells, and what is known of an imported function besides. */
+async function withHelp(kernel: KernelState, info: ts.QuickInfo, deep: boolean): Promise<string> {
+  const imported = info.displayParts?.find(({ kind }) => kind === "aliasName")?.text;
+  const help = imported === undefined ? undefined : await kernel.functionHelp(imported);
+  return [markdownOf(info, deep), ...(help === undefined ? [] : [help])].join("\n\n");
 }
 
 const plainTags = ["param", "returns"];

@@ -13,6 +13,8 @@ export interface KernelState {
   readonly interrupts: Interrupts;
   /** The services for languages inside strings, loaded on first use. */
   readonly languages: () => Promise<readonly StringLanguage[]>;
+  /** Markdown about an imported function, put behind its docstring; undefined for a name that it does not know. */
+  readonly functionHelp: (name: string) => Promise<string | undefined>;
   readonly questions: InputQuestions;
   readonly history: HistoryEntry[];
   readonly publish: (parent: Message["parent"], type: string, content: object) => void;
