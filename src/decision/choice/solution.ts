@@ -55,7 +55,7 @@ export interface Tried {
 export interface Solution extends Tried {
   /** Rounded to the multiple asked for. */
   readonly value: number;
-  /** Before it was rounded to a multiple: where the target begins to be met. */
+  /** Before it was rounded to a multiple: where the target begins to be met; of a simulation to a 64th of it. */
   readonly exact: number;
   /** The measure at `value`, with its Monte-Carlo error where it is simulated. */
   readonly achieved: number;

@@ -25,6 +25,9 @@ import { type Crossing, onMultiple, type Roots, solveWithin } from "./solve-with
 const simulatedLooks = 12;
 const simulatedTolerance = 1e-5;
 
+/** To which part of a multiple the setting before rounding is known there. */
+const simulatedParts = 64;
+
 /**
  * Finds what a parameter, a first value or the level of an input must be, so that a measure of the projection meets a target.
  *
@@ -57,7 +60,7 @@ export function solveFor(subject: Fit | Rule, options: SolveOptions): Solved {
   const roots = solveWithin(search.excess, range[0], range[1], {
     edge: until.is === undefined,
     multiple: until.is === undefined ? multiple : undefined,
-    ...(reader.simulated && { looks: simulatedLooks, tolerance: search.tolerance, slack: search.slack }),
+    ...(reader.simulated && { looks: simulatedLooks, tolerance: simulatedTolerance, slack: search.slack }),
   });
   const everywhere = measuredWhereAllMeet(roots, aim, until);
   const past = pastAlready(context, until, setting);
@@ -136,8 +139,7 @@ interface Search {
   readonly excess: (value: number) => number;
   /** Twice the Monte-Carlo error. */
   readonly slack: (value: number) => number;
-  /** Relative width at which a search ends. */
-  readonly tolerance: number;
+  readonly simulated: boolean;
 }
 
 function searchOf(reader: MeasureReader, setting: Setting, target: Target, aim: number): Search {
@@ -151,7 +153,7 @@ function searchOf(reader: MeasureReader, setting: Setting, target: Target, aim: 
     read,
     excess: (value) => sidedExcess(target, read(value).value - aim),
     slack: (value) => 2 * read(value).error,
-    tolerance: reader.simulated ? simulatedTolerance : 0,
+    simulated: reader.simulated,
   };
 }
 
@@ -208,8 +210,10 @@ function solutionAt(
 }
 
 /** Where a target begins to be met between the multiples on either side. */
-function unrounded({ at, below, above }: Crossing, { excess, tolerance }: Search): number {
+function unrounded({ at, below, above }: Crossing, { excess, simulated }: Search): number {
   if (below === above) return at;
+  const size = Math.max(Math.abs(below), Math.abs(above));
+  const tolerance = simulated ? (above - below) / (simulatedParts * size) : 0;
   return solveWithin(excess, below, above, { looks: 2, edge: true, tolerance }).roots[0]?.at ?? at;
 }
 
