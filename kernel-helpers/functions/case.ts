@@ -67,22 +67,22 @@ export function openCase(options: CaseOptions): void {
  * @throws {ModelError} `no-case-open` | `empty-answer`.
  * @example answer(`Draw down at hour 138. ${ready.sentence}`);
  */
-export function answer(said: string): void {
+export function answer(sentence: string): void {
   checkCall("answer", arguments);
-  const sentence = superscript(said);
+  const said = superscript(sentence);
   if (caseLog.head() === undefined) throw refuseNoCase("answer(...)");
-  if (sentence.trim() === "") throw refuseEmptyAnswer();
-  caseLog.noteAnswer(sentence);
+  if (said.trim() === "") throw refuseEmptyAnswer();
+  caseLog.noteAnswer(said);
   const cautions = caseLog.cautions();
   const html =
     `<p style="margin:0;color:${theme.mutedText};font-size:13px;font-weight:600">Answer</p>` +
-    answerParts(sentence) +
+    answerParts(said) +
     cautions.map((text) => `<p style="margin:.4em 0 0">Caution: ${escapeHtml(text)}</p>`).join("");
   show(
-    showing({ kind: "answer", sentence }, () => ({
-      "application/vnd.periodwise.answer+json": { sentence, cautions },
+    showing({ kind: "answer", sentence: said }, () => ({
+      "application/vnd.periodwise.answer+json": { sentence: said, cautions },
       "text/html": boxed(html),
-      "text/plain": [`Answer: ${sentence}`, ...cautions.map((text) => `Caution: ${text}`)].join("\n"),
+      "text/plain": [`Answer: ${said}`, ...cautions.map((text) => `Caution: ${text}`)].join("\n"),
     })),
   );
 }

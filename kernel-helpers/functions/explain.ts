@@ -16,7 +16,7 @@ export interface Explanation {
  * fits, tests and forecasts, and the functions of the rule language; a related word leads to its term.
  *
  * @param word - the term, in any case, singular or plural.
- * @throws {ModelError} `no-term` | `unknown-term`, with the nearest terms and those of the case's own field.
+ * @throws {ModelError} `unknown-term`, with the nearest terms and those of the case's own field.
  * @example explain("fill rate").term.field; // "stock"
  */
 export function explain(word: string): Readonly<Explanation> {

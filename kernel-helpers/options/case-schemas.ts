@@ -34,7 +34,7 @@ const closeCaseSchema: FunctionSchema = { name: "closeCase", takes: [], example:
 
 const explainSchema: FunctionSchema = {
   name: "explain",
-  takes: [{ name: "name", takes: text("fill rate", "a word of the trade") }],
+  takes: [{ name: "word", takes: text("fill rate", "a word of the trade") }],
   example: 'explain("fill rate")',
 };
 

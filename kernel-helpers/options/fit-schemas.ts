@@ -127,7 +127,10 @@ const gridIntervalSchema: FunctionSchema = {
 
 const updateFitSchema: FunctionSchema = {
   name: "updateFit",
-  takes: [fitted, observations],
+  takes: [
+    { ...fitted, name: "before" },
+    { ...observations, name: "later" },
+  ],
   example: "updateFit(fit, laterObservations)",
 };
 

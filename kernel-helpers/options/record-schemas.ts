@@ -182,7 +182,7 @@ const differenceOptions: Schema<DifferenceOptions> = {
 
 const differencesSchema: FunctionSchema = {
   name: "differences",
-  takes: [observed],
+  takes: [{ ...observed, name: "record" }],
   options: { fields: differenceOptions },
   example: 'differences(observations, { per: "log" })',
 };

@@ -25,6 +25,18 @@ describe("options of the type and of the schema are the same", () => {
   });
 });
 
+describe("a message calls an argument as the docstring does", () => {
+  test.each([...functions.values()].map((schema) => [schema.name, schema] as const))(
+    "%s",
+    (name, { takes }) => {
+      const parameters = signatures
+        .get(name)!
+        .flatMap((signature) => signature.parameters.map((each) => each.name));
+      for (const argument of takes) expect(parameters).toContain(argument.name);
+    },
+  );
+});
+
 test("the sentence of every field is the comment above it", () => {
   const unlike = describedFields(found).filter(({ comment, field }) => comment !== field.says);
   if (process.env["PERIODWISE_SENTENCES"] === "write") return writeSentences(unlike);
