@@ -106,7 +106,7 @@ describe("a rule's name", () => {
 
   test.each([[5], [""], [null]])("%j is an error", (name) => {
     expect(() => recurrence("N[t+1] = R*N", { name: name as string })).toThrow(
-      "Option `name` must be a non-empty string",
+      /^Option `name` must be a (text|non-empty string)/,
     );
   });
 });
