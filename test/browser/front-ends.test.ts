@@ -92,7 +92,7 @@ describe.runIf(browserThere && frontEndsThere)(
       expect(still).toHaveLength(figureCount);
       for (const { picture, drawn, alternative } of still) {
         expect({ picture, drawn }).toEqual({ picture: true, drawn: [] });
-        expect(alternative).toContain("Across:");
+        expect(alternative).toContain("Horizontal axis:");
       }
       expect(await untrusted.page.locator(".output_html table th").first().textContent()).not.toBe("");
       expect(await untrusted.page.locator("img[src=x]").count()).toBe(0);

@@ -63,7 +63,7 @@ describe.runIf(browserThere)("our page, with every kind of figure and table", ()
         if (axis.unit) expect(drawn).toContain(axis.unit.replace("10^4", "10⁴").replaceAll(" ", ""));
       }
       expect(seen[i]?.alternative).toContain(title);
-      expect(seen[i]?.alternative).toContain("Across:");
+      expect(seen[i]?.alternative).toContain("Horizontal axis:");
     });
     expect(await page.locator(".pw-figure details table").count()).toBeGreaterThanOrEqual(figureCount);
     await page.close();

@@ -146,16 +146,6 @@ describe("a one-step fit", () => {
     near(of(line, "b").value, slope, 1e-10);
     near(of(line, "a").value, meanY - slope * meanX, 1e-9);
   });
-
-  test("reports the small-sample bias of its slope, and a slope near 1", () => {
-    const stream = randomStream(1);
-    const x = [0];
-    for (let t = 0; t < 40; t++) x.push(0.97 * x[t]! + stream.normal());
-    const codes = fit(affine, record({ x }), { errors: "process" }).groups[0]!.warnings.map(
-      ({ code }) => code,
-    );
-    expect(codes).toContain("slope-bias");
-  });
 });
 
 describe("what the record does not determine", () => {

@@ -105,6 +105,8 @@ describe("a rule's name", () => {
   });
 
   test.each([[5], [""], [null]])("%j is an error", (name) => {
-    expect(() => recurrence("N[t+1] = R*N", { name: name as string })).toThrow("Option `name` must be a");
+    expect(() => recurrence("N[t+1] = R*N", { name: name as string })).toThrow(
+      /^Option `name` must be a (text|non-empty string)/,
+    );
   });
 });

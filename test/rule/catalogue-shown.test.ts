@@ -15,6 +15,6 @@ test("commands without what they need ask for it in words", () => {
   expect(() => changePoint(undefined as never, undefined as never)).toThrow("needs a rule");
   expect(() => changePoint(quadratic, undefined as never)).toThrow("needs observations");
   expect(() => explain(undefined as never)).toThrowErrorMatchingInlineSnapshot(
-    `[ModelError: The \`name\` of \`explain\` must be a word of the trade; nothing was given. Write \`explain("fill rate")\`.]`,
+    `[ModelError: The \`word\` of \`explain\` must be a word of the trade; nothing was given. Write \`explain("fill rate")\`.]`,
   );
 });

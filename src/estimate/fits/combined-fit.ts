@@ -47,15 +47,15 @@ export function combinedFit(rule: Rule, groups: readonly ObservedGroup[], option
     maps.map((map) => gather(found.at, map, new Float64Array(map.length))),
     { sumOfSquares: found.value, free: rows.size, knownSd: options.sd !== undefined },
   );
-  const measures = { sigma: Math.sqrt(found.value / left), exact: true };
+  const together = { values: rows.count, unknowns: rows.size };
+  const measures = { sigma: Math.sqrt(found.value / left), exact: true, together };
   return {
     criteria: criteria(found.value, rows, options),
     ...(common && { commonParameters: common }),
     population: estimates.filter(({ role }) => role === "parameter"),
     groups: groups.map((group, g) => {
       const searched = { group, unknowns: own[g]!, rows: parts[g]!.rows };
-      const part = describeFit(rule, searched, options, partOf(found, maps[g]!, rows.size), measures);
-      return { ...part, degreesOfFreedom: left };
+      return describeFit(rule, searched, options, partOf(found, maps[g]!, rows.size), measures);
     }),
   };
 }

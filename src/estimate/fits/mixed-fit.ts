@@ -58,7 +58,8 @@ export function mixedFit(rule: Rule, groups: readonly ObservedGroup[], options: 
   minusTwice(found.at);
   const variance = found.at[2 * parameters]!;
   const count = members.reduce((sum, each) => sum + each.part.rows.count, 0);
-  const measures = { sigma: Math.sqrt(variance), exact: false };
+  const together = { values: count, unknowns: population.names.length };
+  const measures = { sigma: Math.sqrt(variance), exact: false, together };
   const size = population.names.length;
   const weights = penalty.roots.map((root) => root ** 2 / variance);
   const means = Float64Array.from(

@@ -19,6 +19,8 @@ export interface Measures {
   readonly sigma: number | undefined;
   /** Of a Poisson fit. */
   readonly overdispersion?: Overdispersion;
+  /** Of groups fitted together: values and unknowns of all. */
+  readonly together?: { readonly values: number; readonly unknowns: number };
   /** Whether intervals and errors are those of n - p degrees of freedom (least squares), or of large samples. */
   readonly exact: boolean;
 }

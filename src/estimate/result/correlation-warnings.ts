@@ -3,13 +3,20 @@ import type { GroupFit } from "./group-fit.js";
 
 /** Correlation of two estimates above which they are named as hard to separate: common practice, no source. */
 const strong = 0.99;
+/**
+ * Relative error from which on an estimate counts as poorly known, and as not known at all: common practice, no source. A
+ * slope and an intercept are always strongly correlated in a record far from 0, and may both be known well.
+ */
+const poor = 0.5;
+const unknown = 2;
 
 /** Two estimates whose errors go together. */
 interface Pair {
   readonly names: readonly [string, string];
   readonly correlation: number;
   readonly combination: "product" | "ratio";
-  /** Relative errors: of the worse of the two, and of the product or ratio, whichever is known better. */
+  /** Relative errors: of the better and the worse of the two, and of the product or ratio, whichever is known better. */
+  readonly better: number;
   readonly alone: number;
   readonly together: number;
 }
@@ -17,11 +24,11 @@ interface Pair {
 /** Pairs of estimates that are hard to separate, each with the combination of them that the record does tell. */
 export function correlationWarnings(fit: Pick<GroupFit, "estimates" | "covariance">): Warning[] {
   return pairsOf(fit)
-    .filter(({ correlation }) => Math.abs(correlation) > strong)
+    .filter(({ correlation, better }) => Math.abs(correlation) > strong && better > poor)
     .map(({ names: [a, b], correlation, combination, alone, together }) => {
       const known =
         together < alone / 2
-          ? `their ${combination} is known to ${percent(together)}, they themselves to ${percent(alone)}`
+          ? `their ${combination} is known to ${percent(together)}, ${alone > unknown ? "but not both of them" : `they themselves to ${percent(alone)}`}`
           : "a combination of them is known better than either";
       return {
         code: "strong-correlation",
@@ -49,6 +56,7 @@ function pairsOf({ estimates, covariance }: Pick<GroupFit, "estimates" | "covari
         names: [a.name, b.name],
         correlation: shared / Math.sqrt(own * other),
         combination: cross < 0 ? "product" : "ratio",
+        better: Math.sqrt(Math.min(own / a.value ** 2, other / b.value ** 2)),
         alone: Math.sqrt(Math.max(own / a.value ** 2, other / b.value ** 2)),
         together: Math.sqrt(Math.max(0, squares - 2 * Math.abs(cross))),
       };

@@ -21,10 +21,14 @@ export function describeFit(
   searched: Searched,
   options: FitOptions,
   found: Optimum,
-  { criteria, sigma, exact, overdispersion }: Omit<Measures, "criteria"> & { readonly criteria?: Criteria },
+  measures: Omit<Measures, "criteria"> & { readonly criteria?: Criteria },
 ): GroupFit {
+  const { criteria, sigma, exact, overdispersion } = measures;
   const { group, unknowns, rows } = searched;
-  const degreesOfFreedom = rows.count - unknowns.names.length;
+  const own = { values: rows.count, unknowns: unknowns.names.length };
+  const size = measures.together ?? own;
+  const left = exact ? size : own;
+  const degreesOfFreedom = left.values - left.unknowns;
   const points = fitPoints(rule, group, rows, found);
   const sumOfSquares = points.reduce((sum, { residual }, i) => sum + (residual * rows.roots[i]!) ** 2, 0);
   place(unknowns, found.at);
@@ -55,8 +59,8 @@ export function describeFit(
       behind: (value - found.value) / found.cut.variance / 2,
     })),
   };
-  const own = searched.warnings?.(found.at) ?? [];
-  return { ...fitted, warnings: [...fitWarnings(fitted, { rule, options, unknowns, found }), ...own] };
+  const warnings = fitWarnings(fitted, { rule, options, unknowns, found, size });
+  return { ...fitted, warnings: [...warnings, ...(searched.warnings?.(found.at) ?? [])] };
 }
 
 /** Values of the states where the path begins: estimated or given ones, or the first recorded ones. */

@@ -9,8 +9,11 @@ import type { GroupFit } from "./group-fit.js";
 import { overdispersionWarnings } from "./overdispersion.js";
 import { slopeWarnings } from "./slope-warnings.js";
 
-/** Usable values a parameter below which a fit carries a caution: common practice, no source. */
-const comfortable = 8;
+/**
+ * Values an unknown below which a fit carries a caution: common practice, no source. Intervals cover with fewer still where
+ * the rule and its errors are right, but whether they are can then hardly be seen.
+ */
+const comfortable = 3;
 
 /** What a fit's warnings are drawn from. */
 export interface FitContext {
@@ -18,6 +21,8 @@ export interface FitContext {
   readonly options: FitOptions;
   readonly unknowns: Unknowns;
   readonly found: Optimum;
+  /** Of what was searched, which may be several groups. */
+  readonly size: { readonly values: number; readonly unknowns: number };
 }
 
 /** What a reader of the fit must know, besides its numbers. */
@@ -31,7 +36,7 @@ export function fitWarnings(fit: Omit<GroupFit, "warnings">, context: FitContext
     ...correlationWarnings(fit),
     ...bends(fit, context.rule),
     ...slopeWarnings(fit, context),
-    ...fewValues(fit),
+    ...fewValues(context.size),
     ...overdispersionWarnings(fit.overdispersion),
   ];
 }
@@ -65,10 +70,16 @@ function undetermined(fit: Omit<GroupFit, "warnings">, { found }: FitContext): W
   }));
 }
 
-/** The split of process and observation error, or a dispersion, that the record leaves open. */
+/**
+ * The split of process and observation error, or a dispersion, that the record leaves open. An observation error whose
+ * interval reaches 0 beside a process error whose interval does not is a result like any other.
+ */
 function spreadsNotSeparated(fit: Omit<GroupFit, "warnings">, options: FitOptions): Warning[] {
-  const loose = fit.estimates.filter((each) => each.role === "scale" && each.standardError === undefined);
-  if (loose.length === 0) return [];
+  const scales = fit.estimates.filter(({ role }) => role === "scale");
+  const loose = scales.filter(({ standardError }) => standardError === undefined);
+  const processStands =
+    loose.length < scales.length && loose.every(({ name }) => name.startsWith("observation"));
+  if (loose.length === 0 || processStands) return [];
   const limits = loose.map(
     ({ name, profile }) => `${name} from ${shown(profile.lower, "0")} to ${shown(profile.upper, "no limit")}`,
   );
@@ -98,7 +109,8 @@ const shown = (limit: number | undefined, none: string): string => limit?.toPrec
 
 function atBounds(fit: Omit<GroupFit, "warnings">, unknowns: Unknowns): Warning[] {
   return fit.estimates
-    .filter((estimate, i) => estimate.value === unknowns.lower[i] || estimate.value === unknowns.upper[i])
+    .filter(({ value }, i) => value === unknowns.lower[i] || value === unknowns.upper[i])
+    .filter(({ role }) => role !== "scale")
     .map((estimate) => ({
       code: "at-bound",
       message: `${estimate.name} sits on its bound ${estimate.value}: its interval is one-sided at best.`,
@@ -132,12 +144,12 @@ function bends(fit: Omit<GroupFit, "warnings">, rule: Rule): Warning[] {
   ];
 }
 
-function fewValues(fit: Omit<GroupFit, "warnings">): Warning[] {
-  if (fit.count >= comfortable * fit.estimates.length) return [];
+function fewValues({ values, unknowns }: FitContext["size"]): Warning[] {
+  if (values >= comfortable * unknowns) return [];
   return [
     {
       code: "few-values",
-      message: `${fit.count} values for ${fit.estimates.length} unknowns: fewer than ${comfortable} each, so read the intervals as rough.`,
+      message: `${values} values for ${unknowns} unknowns: fewer than ${comfortable} each, too few to check the rule and its errors.`,
     },
   ];
 }
